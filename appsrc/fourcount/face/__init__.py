@@ -1,0 +1,1 @@
+"""The window, its session and its settings."""

@@ -1,0 +1,1 @@
+"""All painting: icons, strips and pictures, for screen and for paper."""

@@ -1,0 +1,1 @@
+"""Risks become a plan of icons in unit coordinates. Imports nobody."""

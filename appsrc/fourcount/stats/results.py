@@ -1,0 +1,70 @@
+"""What a computation takes and what it can answer."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from dataclasses import dataclass, field
+from types import MappingProxyType
+
+Fact = str | int | float
+
+GAP_KEYS = (
+    "empty-table",  # nobody in either group
+    "empty-index-group",  # nobody in the index group
+    "empty-reference-group",  # nobody in the reference group
+    "empty-group",  # nobody in the one group that is asked about
+    "no-events",  # no event in either group: the ratio is 0/0
+    "no-non-events",  # everybody had the event: the odds ratio is not determined
+    "one-outcome-only",  # one column is all zero: the odds ratio is not determined by the table
+    "zero-width",  # the bare formula would give an interval of zero width
+    "beyond-one",  # a risk would pass 100%
+    "beyond-zero",  # a risk would fall below 0
+)
+"""Every reason for which a function of this folder gives no figure."""
+
+
+@dataclass(frozen=True, slots=True)
+class Gap:
+    """A figure that cannot be given: the key of the reason (one of ``GAP_KEYS``) and the facts for its sentence."""
+
+    key: str
+    facts: Mapping[str, Fact] = field(default_factory=lambda: MappingProxyType({}))
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class Interval:
+    """A confidence interval; a limit can be ``inf``, never nan. ``adjusted`` names a correction in use ("half")."""
+
+    low: float
+    high: float
+    adjusted: str | None = None
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class Counts:
+    """The four counts of an unpaired table, each a whole number from 0 to 10^9."""
+
+    index_events: int
+    index_non_events: int
+    reference_events: int
+    reference_non_events: int
+
+    @property
+    def index_total(self) -> int:
+        return self.index_events + self.index_non_events
+
+    @property
+    def reference_total(self) -> int:
+        return self.reference_events + self.reference_non_events
+
+    @property
+    def events(self) -> int:
+        return self.index_events + self.reference_events
+
+    @property
+    def non_events(self) -> int:
+        return self.index_non_events + self.reference_non_events
+
+    @property
+    def total(self) -> int:
+        return self.index_total + self.reference_total
