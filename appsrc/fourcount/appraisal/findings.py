@@ -23,9 +23,10 @@ MEASURES = (
     "risk_difference",
     "number_needed",
     "risk_ratio",
+    "other_risk_ratio",
     "odds_ratio",
 )
-"""The keys of ``OutcomeFindings.measures``."""
+"""The keys of ``OutcomeFindings.measures``; ``other_risk_ratio`` is the ratio of not having the event."""
 
 
 class Figure(msgspec.Struct, frozen=True, kw_only=True):
