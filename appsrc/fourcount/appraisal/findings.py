@@ -12,7 +12,7 @@ from fourcount.stats.results import Counts, Fact, Gap, Interval
 
 __all__ = [
     "Caution", "Conversion", "Counts", "Fact", "Figure", "Gap", "Interval", "Kind", "Mark",
-    "NumberNeeded", "NumberNeededLimit", "OutcomeFindings", "PatientFindings", "Probability", "Totals",
+    "NumberNeeded", "NumberNeededLimit", "OutcomeFindings", "PatientFindings", "Probability", "Range", "Totals",
 ]  # fmt: skip
 
 MEASURES = (
@@ -28,12 +28,42 @@ MEASURES = (
 )
 """The keys of ``OutcomeFindings.measures``; ``other_risk_ratio`` is the ratio of not having the event."""
 
+GAP_KEYS = (
+    "not-typed",  # not all four counts are there yet
+    "unreadable",  # a cell holds text that gives no count
+    "follows",  # the figure takes a moment and is computed apart
+    "design-survey-nnt",  # a cross-sectional survey has no number needed to treat
+    "design-case-control",  # a case-control study gives no risk: its totals are those of cases and controls
+    "case-control-needs-baseline",  # without an outside starting risk a case-control study says nothing of a patient
+    "no-starting-risk",  # nothing typed, and the reference group has nobody
+    "baseline-unreadable",  # the typed starting risk gives no risk
+    "carried-gap",  # the effect to carry has no value
+    "undetermined-at-baseline",  # an effect of 0 or infinity says nothing at a starting risk of 0% or 100%
+    "bare-starting-risk",  # the starting risk is a bare value without an interval of its own
+    "limit-withheld",  # one limit of the difference is withheld, so the number needed has no interval
+)
+"""Every reason this folder gives for withholding a figure, beside those of ``stats.results.GAP_KEYS``."""
+
+
+class Range(msgspec.Struct, frozen=True, kw_only=True):
+    """An interval of which exactly one limit cannot be given, since a risk would pass 100% there.
+
+    Only figures under the patient have one; where both limits cannot be given, the interval is a ``Gap``.
+    """
+
+    low: float | Gap
+    high: float | Gap
+    adjusted: str | None = None
+
 
 class Figure(msgspec.Struct, frozen=True, kw_only=True):
-    """An estimate with its interval; ``method`` is the key of the interval's method in the table of methods."""
+    """An estimate with its interval; ``method`` is the key of the interval's method in the table of methods.
+
+    Either can be a ``Gap`` while the other stands. In ``measures`` the interval is never a ``Range``.
+    """
 
     estimate: float | Gap
-    interval: Interval | Gap
+    interval: Interval | Range | Gap
     method: str
 
 
@@ -56,9 +86,10 @@ class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
     """The effect carried to one starting risk.
 
     ``without`` and ``with_`` are risks; ``without`` has an interval only where the table's own reference
-    group is the starting risk. ``difference`` is with minus without. ``range_from`` says what the range
-    holds: "table" (the table's direct intervals) or "effect" (the effect's limits at a bare starting risk).
-    ``risk_ratio`` is the relative figure at this starting risk, whatever effect was carried.
+    group is the starting risk (else the Gap "bare-starting-risk"). ``difference`` is with minus without.
+    ``range_from`` says what the range holds: "table" (the table's direct intervals) or "effect" (the effect's
+    limits at a bare starting risk). ``risk_ratio`` is the relative figure at this starting risk, whatever
+    effect was carried. A figure from the effect names the effect's method.
     """
 
     baseline: float
