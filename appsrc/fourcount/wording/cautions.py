@@ -1,0 +1,102 @@
+"""What to keep in mind: one plain sentence for every caution, and the block that is always on screen."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Caution
+from fourcount.wording.facts import told
+
+STANDING = (
+    "Calculates and displays what a study’s numbers imply. Does not recommend, and does not replace clinical "
+    "judgement, local guidelines or qualified advice. Averages of a study’s people, from what was typed: check it "
+    "against the paper. One study is not all the evidence. Not assessed as a medical device."
+)
+"""The short block that is always on screen and on every page."""
+
+STANDING_FULL = (
+    "Fourcount calculates and displays what a study’s numbers imply, for education and for discussion between a "
+    "professional and a patient.",
+    "It does not recommend, and does not replace clinical judgement, local guidelines or qualified advice.",
+    "The figures depend on what was typed: check it against the paper.",
+    "They are averages of a study’s people and may not fit one person.",
+    "One study is not all the evidence.",
+    "Fourcount is not assessed as a medical device, and no such claim is made.",
+)
+"""The same in whole sentences, for exports and help."""
+
+TEXTS = {
+    "odds-ratio-differs": (
+        "Odds ratio and risk ratio",
+        "The odds ratio {odds_ratio} lies farther from 1 than the risk ratio {risk_ratio}: "
+        "do not read the one as the other.",
+    ),
+    "effect-kept-constant": (
+        "The same effect elsewhere",
+        "The {effect} is assumed to be the same at {baseline} as at the study’s own {study}.",
+    ),
+    "baseline-far": (
+        "A distant starting risk",
+        "The starting risk of {baseline} is outside half to twice the study’s own {study}: "
+        "the study says less about such people.",
+    ),
+    "baseline-uncertain": (
+        "The starting risk",
+        "The range leaves out that {baseline} is itself uncertain.",
+    ),
+    "rests-on-baseline": (
+        "The starting risk",
+        "Every risk, difference and number needed here rests on the starting risk of {baseline}, "
+        "which is not from this study.",
+    ),
+    "controls-over-time": (
+        "How controls were chosen",
+        "If controls were sampled as cases arose, the study’s ratio is a rate ratio and must not be converted.",
+    ),
+    "observational": (
+        "Confounding",
+        "A {design} does not assign its groups: these are crude figures, and other differences between the groups "
+        "may explain them.",
+    ),
+    "converted-limits": (
+        "Converted limits",
+        "The odds ratio’s limits are converted at {baseline} as if that were certain; where the odds ratio is "
+        "adjusted, the conversion is approximate.",
+    ),
+    "zero-cells": (
+        "Zeros",
+        "{count} of the four counts is 0: estimates or limits of 0 or infinity are shown as they are.",
+    ),
+    "half-added": (
+        "Half added",
+        "Because of a count of 0, half was added to each count for the textbook {measure} and its interval.",
+    ),
+    "through-no-effect": (
+        "No effect is inside the interval",
+        "The interval includes no effect: the study is compatible with fewer events and with more.",
+    ),
+    "family-parts": (
+        "Two methods",
+        "The p value and an interval disagree about no effect: they rest on different methods.",
+    ),
+    "rare-harm": (
+        "A harm in a trial",
+        "With a harm in {risk} of people, one trial’s number of people and time are too small to show it reliably.",
+    ),
+    "leans": (
+        "No effect is inside the range",
+        "The range at this starting risk includes no difference and may lean to the other side of the estimate.",
+    ),
+}
+UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
+SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or infinity are shown as they are."
+
+
+def caution_text(caution: Caution) -> str:
+    """The caution as one plain sentence with its numbers in it."""
+    if caution.key == "zero-cells" and caution.facts.get("count", 1) != 1:
+        return told(SEVERAL_ZEROS, caution.facts)
+    return told(TEXTS.get(caution.key, UNKNOWN)[1], caution.facts)
+
+
+def caution_title(caution: Caution) -> str:
+    """What the caution is about, in a few words."""
+    return TEXTS.get(caution.key, UNKNOWN)[0]

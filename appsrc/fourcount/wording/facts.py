@@ -1,0 +1,95 @@
+"""Facts of a gap, a mark or a caution put into its sentence, each in its own way of being written.
+
+A sentence is a template with the facts' names in braces. A fact that is not there leaves a stand-in,
+never an exception: a sentence with a hole still says more than none.
+"""
+
+from __future__ import annotations
+
+from collections.abc import Callable, Mapping
+
+from fourcount.wording import numbers
+
+Fact = str | int | float
+
+LONGEST_QUOTE = 40
+MEASURE_NAMES = {
+    "risk": "risk",
+    "risk_index": "risk",
+    "risk_reference": "risk",
+    "odds_index": "odds",
+    "odds_reference": "odds",
+    "risk_difference": "difference",
+    "number_needed": "number needed",
+    "risk_ratio": "risk ratio",
+    "other_risk_ratio": "risk ratio of the other outcome",
+    "odds_ratio": "odds ratio",
+}
+DESIGN_NAMES = {
+    "trial": "randomised trial",
+    "cohort": "cohort study",
+    "survey": "cross-sectional survey",
+    "case-control": "case-control study",
+}
+COUNT_WORDS = ("None", "One", "Two", "Three", "Four")
+STAND_INS = {
+    "text": "This",
+    "baseline": "this starting risk",
+    "study": "risk",
+    "risk": "so low a risk",
+    "effect": "effect",
+    "measure": "figure",
+    "design": "study without randomisation",
+    "count": "Some",
+}
+
+
+def told(template: str, facts: Mapping[str, Fact]) -> str:
+    """The template with its facts in their places."""
+    return template.format_map(_Written(facts))
+
+
+def quoted(text: str) -> str:
+    """What somebody typed, on one line and cut to forty characters."""
+    line = " ".join(text.split())
+    return line if len(line) <= LONGEST_QUOTE else f"{line[: LONGEST_QUOTE - 1]}…"
+
+
+class _Written(dict[str, str]):
+    """The facts as text; a name that is missing gives its stand-in."""
+
+    def __init__(self, facts: Mapping[str, Fact]) -> None:
+        super().__init__({name: _written(name, value) for name, value in facts.items()})
+
+    def __missing__(self, name: str) -> str:
+        return STAND_INS.get(name, "…")
+
+
+def _written(name: str, value: Fact) -> str:
+    writer = WRITERS.get(name)
+    if writer is not None and isinstance(value, int | float) is (name in NUMERIC):
+        return writer(value)
+    if isinstance(value, float):
+        return numbers.ratio(value) if value >= 0 else numbers.plain(value)
+    return numbers.whole(value) if isinstance(value, int) else quoted(value)
+
+
+def _count_word(value: int) -> str:
+    return COUNT_WORDS[value] if 0 <= value < len(COUNT_WORDS) else numbers.whole(value)
+
+
+NUMERIC = frozenset(
+    {"baseline", "study", "risk", "odds_ratio", "risk_ratio", "value", "count"}
+)
+WRITERS: dict[str, Callable[..., str]] = {
+    "baseline": numbers.percent_given,
+    "study": numbers.percent,
+    "risk": numbers.percent,
+    "odds_ratio": numbers.ratio,
+    "risk_ratio": numbers.ratio,
+    "value": numbers.ratio,
+    "count": _count_word,
+    "effect": lambda key: MEASURE_NAMES.get(key, key),
+    "measure": lambda key: MEASURE_NAMES.get(key, key),
+    "design": lambda key: DESIGN_NAMES.get(key, key),
+}

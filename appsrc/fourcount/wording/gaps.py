@@ -1,0 +1,65 @@
+"""Why a figure is not there, and what is wrong with something that was typed: one sentence for every key."""
+
+from __future__ import annotations
+
+from fourcount.record.entry.readings import Mark, Unreadable
+from fourcount.stats.results import Gap
+from fourcount.wording.facts import told
+
+GAP_TEXTS = {
+    # the numbers themselves
+    "empty-table": "There is nobody in either group.",
+    "empty-index-group": "There is nobody in the index group.",
+    "empty-reference-group": "There is nobody in the reference group.",
+    "empty-group": "There is nobody in this group.",
+    "no-events": "Nobody in either group had the event, so this figure is not determined.",
+    "no-non-events": "Everybody in both groups had the event, so this figure is not determined.",
+    "one-outcome-only": "Everybody in the table had the same outcome, so it does not determine the odds ratio.",
+    "zero-width": "The bare formula would give an interval of zero width, which says more than the data can; "
+    "the score intervals give a real one.",
+    "beyond-one": "The risk would pass 100% here; the odds ratio can be carried instead.",
+    "beyond-zero": "The risk would fall below 0% here; the odds ratio can be carried instead.",
+    # the design, the table, the patient
+    "not-typed": "Type the four counts of the table.",
+    "unreadable": "A cell of the table cannot be read as a count; the mark beside it says why.",
+    "follows": "This figure takes a moment and will follow.",
+    "design-survey-nnt": "A cross-sectional survey sees who has the event at one time, not who comes to have it, "
+    "so it gives no number needed to treat.",
+    "design-case-control": "A case-control study sets how many cases and controls it takes, "
+    "so its totals give neither risks nor what follows from them.",
+    "case-control-needs-baseline": "Type a starting risk from another source: a case-control study has none of its own.",
+    "no-starting-risk": "Type a starting risk: nobody is in the reference group to give one.",
+    "baseline-unreadable": "The starting risk cannot be read; 12% or 12 in 100 would do.",
+    "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
+    "undetermined-at-baseline": "An effect of 0 or infinity says nothing at a starting risk of 0% or 100%.",
+    "bare-starting-risk": "The starting risk was typed without a range of its own.",
+    "limit-withheld": "One limit of the difference cannot be given, so the number needed has no interval.",
+}
+UNKNOWN_GAP = "This figure cannot be given."
+
+MARK_TEXTS = {
+    "not-a-count": "{text}: a whole number of people is needed, such as 38",
+    "negative": "{text}: a count cannot be negative",
+    "decimal": "{text}: people are counted whole, without decimals",
+    "too-large": "{text}: a count goes up to 1,000,000,000",
+    "events-above-total": "{text}: more events than people; the events have to fit into the total",
+    "total-disagrees": "{text}: the total is not the sum of this group’s two counts; check which of them the paper prints",
+    "percent-disagrees": "{text}: the percentage does not follow from the counts, which are used; "
+    "check it against the paper",
+    "not-a-risk": "{text}: a risk is needed, such as 12% or 12 in 100",
+    "percent-or-fraction": "{text}: this could be a percentage or a fraction; write it with its sign, such as 12%",
+    "risk-out-of-range": "{text}: a risk lies between 0% and 100%",
+    "not-a-level": "{text}: a confidence level is needed, such as 95%",
+    "level-out-of-range": "{text}: a confidence level here lies between 80% and 99.9%",
+}
+UNKNOWN_MARK = "{text}: this cannot be read"
+
+
+def gap_text(gap: Gap) -> str:
+    """One sentence that says why a figure is not given, and what would help where something would."""
+    return told(GAP_TEXTS.get(gap.key, UNKNOWN_GAP), gap.facts)
+
+
+def mark_text(mark: Mark | Unreadable) -> str:
+    """What was typed, what is wrong with it, and what would do."""
+    return told(MARK_TEXTS.get(mark.key, UNKNOWN_MARK), mark.facts)
