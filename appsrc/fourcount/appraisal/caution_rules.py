@@ -1,0 +1,144 @@
+"""When each caution holds. A rule answers with the facts for its sentence, or with None."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.case import NO_EFFECT, Case, excludes, straddles, value
+from fourcount.appraisal.findings import Fact, Gap, Interval
+
+Facts = dict[str, Fact]
+
+RARE = 0.01
+"""A harm under this risk is called rare here: 1%, common practice."""
+
+
+def odds_ratio_differs(case: Case) -> Facts | None:
+    """Odds ratio and risk ratio part by more than 20%, the larger against the smaller.
+
+    Their quotient is (d/n2)/(b/n1), so whole numbers decide it, and swapping the groups cannot change it.
+    """
+    odds_ratio, risk_ratio = (value(case.figures.get("odds_ratio")), value(case.figures.get("risk_ratio")))
+    if odds_ratio is None or risk_ratio is None or odds_ratio == risk_ratio:
+        return None
+    counts = case.counts
+    reference = counts.reference_non_events * counts.index_total
+    index = counts.index_non_events * counts.reference_total
+    if 5 * max(reference, index) <= 6 * min(reference, index):
+        return None
+    return {"odds_ratio": odds_ratio, "risk_ratio": risk_ratio}
+
+
+def effect_kept_constant(case: Case) -> Facts | None:
+    """The study's relative effect is taken to hold at another starting risk."""
+    carried, study = case.carried, value(case.figures.get("risk_reference"))
+    if carried is None or study is None:
+        return None
+    effect = value(carried.carried)
+    if effect is None:
+        return None
+    return {"effect": carried.effect, "value": effect, "baseline": carried.baseline, "study": study}
+
+
+def baseline_far(case: Case) -> Facts | None:
+    """The starting risk is under half or over twice the reference group's."""
+    carried, study = case.carried, value(case.figures.get("risk_reference"))
+    if carried is None or study is None or study / 2 <= carried.baseline <= study * 2:
+        return None
+    return {"baseline": carried.baseline, "study": study}
+
+
+def baseline_uncertain(case: Case) -> Facts | None:
+    """A range at a bare starting risk holds nothing of that risk's own uncertainty."""
+    carried = case.carried
+    if carried is None or isinstance(carried.with_.interval, Gap):
+        return None
+    return {"baseline": carried.baseline}
+
+
+def rests_on_baseline(case: Case) -> Facts | None:
+    """In a case-control study every absolute figure rests on the starting risk."""
+    carried = case.carried
+    if carried is None or case.outcome.design != "case-control":
+        return None
+    return {"baseline": carried.baseline}
+
+
+def controls_over_time(case: Case) -> Facts | None:
+    """The odds ratio of a case-control study is carried: it must not be if it is a rate ratio."""
+    return None if rests_on_baseline(case) is None else {}
+
+
+def observational(case: Case) -> Facts | None:
+    """The groups were not made alike by chance, and the counts give the crude effect only."""
+    return None if case.outcome.design == "trial" else {"design": case.outcome.design}
+
+
+def converted_limits(case: Case) -> Facts | None:
+    """The odds ratio's limits were converted at a given starting risk."""
+    conversion = case.conversion
+    if isinstance(conversion, Gap) or conversion.baseline_from != "given":
+        return None
+    if isinstance(conversion.risk_ratio.interval, Gap):
+        return None
+    return {"baseline": conversion.baseline}
+
+
+def zero_cells(case: Case) -> Facts | None:
+    """One or more of the four counts is 0."""
+    counts = case.counts
+    cells = (counts.index_events, counts.index_non_events, counts.reference_events, counts.reference_non_events)
+    zeros = cells.count(0)
+    return {"count": zeros} if zeros else None
+
+
+def half_added(case: Case, *, measure: str) -> Facts | None:
+    """The measure's interval was computed with 1/2 added to the counts."""
+    figure = case.figures.get(measure)
+    if figure is None or not isinstance(figure.interval, Interval) or figure.interval.adjusted != "half":
+        return None
+    return {"measure": measure}
+
+
+def through_no_effect(case: Case) -> Facts | None:
+    """The interval of the difference, or of the odds ratio where there is none, holds fewer and more."""
+    for measure in ("risk_difference", "odds_ratio"):
+        figure = case.figures.get(measure)
+        answer = None if figure is None else straddles(figure.interval, NO_EFFECT[measure])
+        if answer is not None:
+            return {} if answer else None
+    return None
+
+
+def family_parts(case: Case) -> Facts | None:
+    """The family's p and one of its intervals differ about no effect, since they rest on different methods."""
+    if isinstance(case.test.p, Gap):
+        return None
+    small_p = case.test.p < 1 - case.table.choices.level
+    for measure, no_effect in NO_EFFECT.items():
+        outside = excludes(case.figures.get(measure), no_effect)
+        if outside is not None and outside != small_p:
+            return {}
+    return None
+
+
+def rare_harm(case: Case) -> Facts | None:
+    """In a trial an unwelcome event is rare and more frequent in the index group."""
+    risk, difference = (value(case.figures.get("risk_index")), value(case.figures.get("risk_difference")))
+    if risk is None or difference is None or case.outcome.design != "trial" or case.outcome.welcome:
+        return None
+    return {"risk": risk} if difference > 0 and risk < RARE else None
+
+
+def leans(case: Case) -> Facts | None:
+    """A carried difference goes through 0 and reaches further on the side away from its estimate."""
+    carried = case.carried
+    difference = None if carried is None else value(carried.difference)
+    if carried is None or difference is None or difference == 0:
+        return None
+    interval = carried.difference.interval
+    if not straddles(interval, 0.0) or isinstance(interval, Gap) or isinstance(interval.low, Gap):
+        return None
+    reaches_up = isinstance(interval.high, Gap) or interval.high > -interval.low
+    reaches_down = not isinstance(interval.high, Gap) and interval.high < -interval.low
+    if difference < 0 and reaches_up:
+        return {"side": "more"}
+    return {"side": "fewer"} if difference > 0 and reaches_down else None

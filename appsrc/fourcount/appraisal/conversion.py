@@ -1,0 +1,52 @@
+"""The odds ratio as a risk ratio at a starting risk."""
+
+from __future__ import annotations
+
+from collections.abc import Callable
+
+from fourcount.appraisal.findings import Conversion, Figure, Gap, Interval, Range
+from fourcount.appraisal.starting_risk import StartingRisk
+from fourcount.stats.conversion import risk_ratio_from_odds_ratio
+
+
+def convert(odds_ratio: Figure, start: StartingRisk) -> Conversion:
+    """Zhang and Yu's risk ratio (1998, JAMA 280:1690) of the estimate and of each limit at one starting risk."""
+    return Conversion(
+        baseline=start.value, baseline_from=start.origin, risk_ratio=converted_figure(odds_ratio, start.value)
+    )
+
+
+def converted_figure(odds_ratio: Figure, baseline: float) -> Figure:
+    """The figure of the risk ratio that an odds ratio means at a starting risk, by the odds ratio's method."""
+
+    def converted(value: float) -> float | Gap:
+        return _risk_ratio(value, baseline)
+
+    return mapped(odds_ratio, converted)
+
+
+def mapped(figure: Figure, function: Callable[[float], float | Gap]) -> Figure:
+    """A figure through an increasing function of its estimate and limits; each may become a gap by itself."""
+    estimate = figure.estimate if isinstance(figure.estimate, Gap) else function(figure.estimate)
+    return Figure(estimate=estimate, interval=_mapped_interval(figure.interval, function), method=figure.method)
+
+
+def _mapped_interval(
+    interval: Interval | Range | Gap, function: Callable[[float], float | Gap]
+) -> Interval | Range | Gap:
+    if isinstance(interval, Gap):
+        return interval
+    low = interval.low if isinstance(interval.low, Gap) else function(interval.low)
+    high = interval.high if isinstance(interval.high, Gap) else function(interval.high)
+    if isinstance(low, Gap):
+        return low if isinstance(high, Gap) else Range(low=low, high=high, adjusted=interval.adjusted)
+    if isinstance(high, Gap):
+        return Range(low=low, high=high, adjusted=interval.adjusted)
+    return Interval(low=low, high=high, adjusted=interval.adjusted)
+
+
+def _risk_ratio(odds_ratio: float, baseline: float) -> float | Gap:
+    # Every odds ratio above 0 is a risk ratio of 1 where everybody has the event; 0 itself says nothing there.
+    if odds_ratio == 0 and baseline == 1:
+        return Gap("undetermined-at-baseline")
+    return risk_ratio_from_odds_ratio(odds_ratio, baseline)
