@@ -13,8 +13,10 @@ STANDING = (
 """The short block that is always on screen and on every page."""
 
 STANDING_FULL = (
-    "Fourcount calculates and displays what a study’s numbers imply, for education and for discussion between a "
-    "professional and a patient.",
+    (
+        "Fourcount calculates and displays what a study’s numbers imply, for education and for discussion between a "
+        "professional and a patient."
+    ),
     "It does not recommend, and does not replace clinical judgement, local guidelines or qualified advice.",
     "The figures depend on what was typed: check it against the paper.",
     "They are averages of a study’s people and may not fit one person.",
@@ -26,8 +28,10 @@ STANDING_FULL = (
 TEXTS = {
     "odds-ratio-differs": (
         "Odds ratio and risk ratio",
-        "The odds ratio {odds_ratio} lies farther from 1 than the risk ratio {risk_ratio}: "
-        "do not read the one as the other.",
+        (
+            "The odds ratio {odds_ratio} lies farther from 1 than the risk ratio {risk_ratio}: "
+            "do not read the one as the other."
+        ),
     ),
     "effect-kept-constant": (
         "The same effect elsewhere",
@@ -35,8 +39,10 @@ TEXTS = {
     ),
     "baseline-far": (
         "A distant starting risk",
-        "The starting risk of {baseline} is outside half to twice the study’s own {study}: "
-        "the study says less about such people.",
+        (
+            "The starting risk of {baseline} is outside half to twice the study’s own {study}: "
+            "the study says less about such people."
+        ),
     ),
     "baseline-uncertain": (
         "The starting risk",
@@ -44,8 +50,10 @@ TEXTS = {
     ),
     "rests-on-baseline": (
         "The starting risk",
-        "Every risk, difference and number needed here rests on the starting risk of {baseline}, "
-        "which is not from this study.",
+        (
+            "Every risk, difference and number needed here rests on the starting risk of {baseline}, "
+            "which is not from this study."
+        ),
     ),
     "controls-over-time": (
         "How controls were chosen",
@@ -53,13 +61,17 @@ TEXTS = {
     ),
     "observational": (
         "Confounding",
-        "A {design} does not assign its groups: these are crude figures, and other differences between the groups "
-        "may explain them.",
+        (
+            "A {design} does not assign its groups: these are crude figures, and other differences between the groups "
+            "may explain them."
+        ),
     ),
     "converted-limits": (
         "Converted limits",
-        "The odds ratio’s limits are converted at {baseline} as if that were certain; where the odds ratio is "
-        "adjusted, the conversion is approximate.",
+        (
+            "The odds ratio’s limits are converted at {baseline} as if that were certain; where the odds ratio is "
+            "adjusted, the conversion is approximate."
+        ),
     ),
     "zero-cells": (
         "Zeros",
@@ -83,7 +95,10 @@ TEXTS = {
     ),
     "leans": (
         "No effect is inside the range",
-        "The range at this starting risk includes no difference and may lean to the other side of the estimate.",
+        (
+            "The range at this starting risk includes none fewer and none more, and reaches further towards {side}, away "
+            "from the estimate."
+        ),
     ),
 }
 UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")

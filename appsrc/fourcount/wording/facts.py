@@ -41,6 +41,10 @@ STAND_INS = {
     "measure": "figure",
     "design": "study without randomisation",
     "count": "Some",
+    "events": "the count",
+    "total": "another number",
+    "typed": "one number",
+    "side": "one side",
 }
 
 
@@ -78,6 +82,14 @@ def _count_word(value: int) -> str:
     return COUNT_WORDS[value] if 0 <= value < len(COUNT_WORDS) else numbers.whole(value)
 
 
+def _measure_name(key: str) -> str:
+    return MEASURE_NAMES.get(key, key)
+
+
+def _design_name(key: str) -> str:
+    return DESIGN_NAMES.get(key, key)
+
+
 NUMERIC = frozenset(
     {"baseline", "study", "risk", "odds_ratio", "risk_ratio", "value", "count"}
 )
@@ -89,7 +101,7 @@ WRITERS: dict[str, Callable[..., str]] = {
     "risk_ratio": numbers.ratio,
     "value": numbers.ratio,
     "count": _count_word,
-    "effect": lambda key: MEASURE_NAMES.get(key, key),
-    "measure": lambda key: MEASURE_NAMES.get(key, key),
-    "design": lambda key: DESIGN_NAMES.get(key, key),
+    "effect": _measure_name,
+    "measure": _measure_name,
+    "design": _design_name,
 }

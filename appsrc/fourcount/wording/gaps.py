@@ -43,9 +43,8 @@ MARK_TEXTS = {
     "decimal": "{text}: people are counted whole, without decimals",
     "too-large": "{text}: a count goes up to 1,000,000,000",
     "events-above-total": "{text}: more events than people; the events have to fit into the total",
-    "total-disagrees": "{text}: the total is not the sum of this group’s two counts; check which of them the paper prints",
-    "percent-disagrees": "{text}: the percentage does not follow from the counts, which are used; "
-    "check it against the paper",
+    "total-disagrees": "{text}: the total here is {typed}, but the group’s total is {total}; check both against the paper",
+    "percent-disagrees": "{text}: {events} of {total} does not round to this percentage; the count is used",
     "not-a-risk": "{text}: a risk is needed, such as 12% or 12 in 100",
     "percent-or-fraction": "{text}: this could be a percentage or a fraction; write it with its sign, such as 12%",
     "risk-out-of-range": "{text}: a risk lies between 0% and 100%",

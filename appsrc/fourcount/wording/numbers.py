@@ -17,13 +17,9 @@ HUNDRED_DECIMALS = 1
 RATIO_DECIMALS = 2
 SMALL_FIGURES = 2  # significant digits of what would otherwise round to nothing
 MOST_DECIMALS = 12
-SMALLEST_PERCENT = (
-    0.000001  # as a fraction: 0.0001%, below which only "less than that" is printed
-)
+SMALLEST_PERCENT = 0.000001  # as a fraction: 0.0001%, below which only "less than that" is printed
 SMALLEST_RATIO = 0.000001
-UNCERTAIN_PART = (
-    1e-9  # taken off a number needed before it is rounded up: the float's own noise
-)
+UNCERTAIN_PART = 1e-9  # taken off a number needed before it is rounded up: the float's own noise
 
 
 def whole(n: int) -> str:
@@ -156,7 +152,7 @@ def _scaled(x: float, places: int) -> int:
     digits = int(mantissa.replace(".", ""))
     power = int(exponent) - 14 + places
     if power >= 0:
-        return digits * 10**power
+        return digits * int(10**power)
     unit: int = 10**-power
     return (2 * digits + unit) // (2 * unit)
 

@@ -1,0 +1,152 @@
+"""The words of the window's own fields, choices and commands."""
+
+from __future__ import annotations
+
+COLUMNS = {"printed": "As printed", "says": "What it says", "patient": "For one patient", "cautions": "Cautions"}
+
+FIELDS = {
+    "title_text": "Title of the paper",
+    "source_text": "Where the numbers stand",
+    "design": "Study",
+    "left_words_text": "Event",
+    "right_words_text": "Event",
+    "welcome": "Event is welcome or not",
+    "span_text": "Time span",
+    "form": "Printed as",
+    "layout": "Groups run",
+    "starting_risk_text": "Starting risk",
+    "starting_risk_source_text": "Source of the starting risk",
+    "effect": "Effect used",
+}
+"""Names of the fields, on screen and for a screen reader."""
+
+HINTS = {
+    "title_text": "Title of the paper",
+    "source_text": "table, page or figure · no patient details",
+    "words": "what happened, as in “fell at least once”",
+    "span_text": "as in “12 months”",
+    "starting_risk_source_text": "where it comes from · no patient details",
+    "label": "name this group",
+    "left_heading": "event",
+    "right_heading": "no event",
+    "left_heading_cases": "cases",
+    "right_heading_cases": "controls",
+}
+"""What a field says while it is empty."""
+
+DESIGNS = {
+    "trial": "randomised trial",
+    "cohort": "cohort study",
+    "survey": "cross-sectional survey",
+    "case-control": "case-control study",
+}
+
+WELCOME = {"unwelcome": "unwelcome", "welcome": "welcome"}
+
+FORMS = {"events-and-others": "38 · 374", "events-of-total": "38 of 412"}
+"""How a paper prints the counts of a group, by a specimen."""
+
+LAYOUTS = {"down": "down", "across": "across"}
+
+FAMILIES = {"score": "score", "textbook": "textbook", "exact": "exact"}
+EFFECTS = {"risk_ratio": "risk ratio", "odds_ratio": "odds ratio"}
+EFFECT_KEPT = "{effect} {value}, kept constant"
+LEVELS = (0.80, 0.90, 0.95, 0.98, 0.99, 0.999)
+OTHER_LEVEL = "another…"
+INTERVALS_PREFIX = "Intervals: "
+LEVEL_PREFIX = "Level: "
+
+ROLES = {"index": "index group", "reference": "reference group", "counted": "counted"}
+TOTAL = "total"
+OF = "of"
+
+GROUP_NAMES = {"first": "first group", "second": "second group"}
+CELL_NAMES = {
+    "events-and-others": "{group}, {outcome}",
+    "left": "{group}, {outcome}",
+    "right": "{group}, all people",
+}
+
+FIRST_STEP = "New here? Open a worked example with invented numbers"
+PATIENT_WAITS = "The picture appears once the four counts are there."
+BASELINE_HINT = "{percent}, as in the study"
+BASELINE_HINT_EMPTY = "as in the study"
+BASELINE_HINT_NEEDED = "needed"
+
+LINKS = {"help": "Methods and sources", "more": "More measures", "less": "Fewer measures"}
+WORKING_OPEN = "Show the working"
+WORKING_CLOSE = "Hide the working"
+FOLLOWS = "being computed…"
+
+MENUS = {"file": "&File", "edit": "&Edit", "table": "&Table", "view": "&View", "help": "&Help"}
+
+COMMANDS = {
+    "new": "&New table",
+    "example": "Open the &worked example",
+    "quit": "&Quit",
+    "undo": "&Undo",
+    "redo": "&Redo",
+    "copy-text": "Copy as &text",
+    "copy-table": "Copy as a t&able",
+    "copy-picture": "Copy the &picture",
+    "swap": "&Swap groups",
+    "count-other": "&Count the other outcome",
+    "form": "Print &form: 38 · 374 or 38 of 412",
+    "layout": "&Groups down or across",
+    "clear": "C&lear the counts",
+    "first-cell": "&Go to the first count",
+    "bigger": "&Larger text",
+    "smaller": "S&maller text",
+    "actual": "&Normal text size",
+    "bars": "&Bars instead of people",
+    "more": "M&ore measures",
+    "methods": "&Methods and sources",
+    "keys": "&Keys",
+    "about": "&About Fourcount",
+}
+"""What each command is called in the menus; ``&`` stands before its access key."""
+
+APPEARANCES = {"system": "Light or dark: as the s&ystem", "light": "L&ight", "dark": "&Dark"}
+
+LINK_WORDS = {
+    "swap": "Swap groups",
+    "count-other": "Count the other outcome",
+    "clear": "Clear",
+    "copy-text": "Copy as text",
+    "copy-table": "Copy as a table",
+    "copy-picture": "Copy the picture",
+}
+
+COPIED = {
+    "copy-text": "Copied as text.",
+    "copy-table": "Copied as a table: paste it into a spreadsheet or a letter.",
+    "copy-picture": "Copied as a picture.",
+}
+NOTHING_TO_COPY = "There is nothing to copy yet: type the four counts first."
+
+CLOSE_TITLE = "Close Fourcount?"
+CLOSE_QUESTION = "This version keeps no file. Closing the window discards what was typed; copy the figures first if you need them."
+CLOSE_YES = "Discard and close"
+CLOSE_NO = "Keep working"
+
+LEVEL_TITLE = "Confidence level"
+LEVEL_QUESTION = "A level from 80% to 99.9%:"
+
+UNEXPECTED = "Something unexpected happened ({name}); your table is untouched. Details without your numbers are in {place}."
+UNEXPECTED_NO_LOG = "Something unexpected happened ({name}); your table is untouched."
+DISMISS = "Dismiss"
+
+KEYS_INTRO = "Tab goes through the fields in reading order. In the table, arrow keys and Enter go from count to count."
+KEYS_MORE = (
+    ("Tab, Shift+Tab", "next field, previous field"),
+    ("Arrow keys, Enter", "from count to count"),
+    ("Enter or Space on a measure", "show or hide its working"),
+    ("Escape", "close the working, or a help window"),
+)
+
+ABOUT = (
+    "Fourcount {version}",
+    "Re-enter the four counts of a published table and see what they say, and what that means for one patient.",
+    "Free software under the MIT licence. It works offline, sends nothing, and keeps no file.",
+    "Text in the system's font {font}; computed with numpy {numpy} and scipy {scipy}; drawn with Qt {qt}.",
+)
