@@ -90,9 +90,7 @@ def _design_name(key: str) -> str:
     return DESIGN_NAMES.get(key, key)
 
 
-NUMERIC = frozenset(
-    {"baseline", "study", "risk", "odds_ratio", "risk_ratio", "value", "count"}
-)
+NUMERIC = frozenset({"baseline", "study", "risk", "odds_ratio", "risk_ratio", "value", "count"})
 WRITERS: dict[str, Callable[..., str]] = {
     "baseline": numbers.percent_given,
     "study": numbers.percent,

@@ -27,7 +27,7 @@ GAP_TEXTS = {
     "so it gives no number needed to treat.",
     "design-case-control": "A case-control study sets how many cases and controls it takes, "
     "so its totals give neither risks nor what follows from them.",
-    "case-control-needs-baseline": "Type a starting risk from another source: a case-control study has none of its own.",
+    "case-control-needs-baseline": "Type a starting risk from another source: a case-control study has none.",
     "no-starting-risk": "Type a starting risk: nobody is in the reference group to give one.",
     "baseline-unreadable": "The starting risk cannot be read; 12% or 12 in 100 would do.",
     "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
@@ -43,7 +43,7 @@ MARK_TEXTS = {
     "decimal": "{text}: people are counted whole, without decimals",
     "too-large": "{text}: a count goes up to 1,000,000,000",
     "events-above-total": "{text}: more events than people; the events have to fit into the total",
-    "total-disagrees": "{text}: the total here is {typed}, but the group’s total is {total}; check both against the paper",
+    "total-disagrees": "{text}: the total here is {typed}, but the group’s total is {total}; check the paper",
     "percent-disagrees": "{text}: {events} of {total} does not round to this percentage; the count is used",
     "not-a-risk": "{text}: a risk is needed, such as 12% or 12 in 100",
     "percent-or-fraction": "{text}: this could be a percentage or a fraction; write it with its sign, such as 12%",

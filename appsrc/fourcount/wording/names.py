@@ -16,9 +16,7 @@ PREPOSITIONS = ("within", "in", "at", "over", "after", "by", "during")
 
 def label(outcome: Outcome, group: Group) -> str:
     """The group's label exactly as typed, or its stand-in."""
-    text = (
-        outcome.index_label_text if group == "index" else outcome.reference_label_text
-    )
+    text = outcome.index_label_text if group == "index" else outcome.reference_label_text
     return text.strip() or STAND_INS[group]
 
 
@@ -31,9 +29,7 @@ def mid_sentence(text: str) -> str:
     """Text inside a sentence: the first word loses its capital if that is its only one ("Usual", not "ACE")."""
     first = text.split(" ", 1)[0]
     stem = first.replace("-", "").replace("'", "").replace("’", "")
-    plain = (
-        len(stem) > 1 and stem.isalpha() and stem[0].isupper() and stem[1:].islower()
-    )
+    plain = len(stem) > 1 and stem.isalpha() and stem[0].isupper() and stem[1:].islower()
     return text[0].lower() + text[1:] if plain else text
 
 
@@ -44,13 +40,7 @@ def sentence_case(text: str) -> str:
 
 def labelled(outcome: Outcome, group: Group) -> bool:
     """Whether the reader named this group."""
-    return bool(
-        (
-            outcome.index_label_text
-            if group == "index"
-            else outcome.reference_label_text
-        ).strip()
-    )
+    return bool((outcome.index_label_text if group == "index" else outcome.reference_label_text).strip())
 
 
 def in_group(outcome: Outcome, group: Group) -> str:
@@ -79,20 +69,12 @@ def other_words(outcome: Outcome) -> str:
 
 def event_key(outcome: Outcome) -> str:
     """The counted event in a picture's key."""
-    return (
-        outcome.event_heading_text.strip()
-        or outcome.event_words_text.strip()
-        or EVENT_STAND_IN
-    )
+    return outcome.event_heading_text.strip() or outcome.event_words_text.strip() or EVENT_STAND_IN
 
 
 def other_key(outcome: Outcome) -> str:
     """The other outcome in a picture's key."""
-    return (
-        outcome.other_heading_text.strip()
-        or outcome.other_words_text.strip()
-        or OTHER_STAND_IN
-    )
+    return outcome.other_heading_text.strip() or outcome.other_words_text.strip() or OTHER_STAND_IN
 
 
 def within_span(outcome: Outcome) -> str:

@@ -99,9 +99,7 @@ def ratio_limit(x: float, estimate: float) -> str:
     if x == estimate:
         return fixed(x, _shown_ratio_decimals(x))
     own = _shown_ratio_decimals(x)
-    decimals = (
-        max(_shown_ratio_decimals(estimate), 0) if 0 < estimate < math.inf else own
-    )
+    decimals = max(_shown_ratio_decimals(estimate), 0) if 0 < estimate < math.inf else own
     if _scaled(x, decimals) == 0:
         decimals = _significant_decimals(x, SMALL_FIGURES)
     return fixed(x, _apart_from_one(x, decimals))
@@ -173,9 +171,7 @@ def _significant_decimals(x: float, figures: int) -> int:
     return decimals - 1 if _scaled(x, decimals) == 10**figures else decimals
 
 
-def _percent_decimals(
-    fraction: float, at_least: int = PERCENT_DECIMALS, figures: int = SMALL_FIGURES
-) -> int:
+def _percent_decimals(fraction: float, at_least: int = PERCENT_DECIMALS, figures: int = SMALL_FIGURES) -> int:
     """Decimals of a percentage: more where somebody would become nobody, or nearly all would become all."""
     shown = _scaled(fraction, at_least + 2)
     if shown == 0 and abs(fraction) >= SMALLEST_PERCENT:
@@ -204,11 +200,7 @@ def _shown_ratio_decimals(x: float) -> int:
 
 def _apart_from_one(x: float, decimals: int) -> int:
     """The first number of decimals at which x does not look like 1, unless it is 1."""
-    while (
-        decimals < MOST_DECIMALS
-        and decimals >= 0
-        and _scaled(x, decimals) == 10**decimals
-    ):
+    while decimals < MOST_DECIMALS and decimals >= 0 and _scaled(x, decimals) == 10**decimals:
         if _scaled(x, MOST_DECIMALS) == 10**MOST_DECIMALS:
             return RATIO_DECIMALS
         decimals += 1
