@@ -1,0 +1,190 @@
+"""What a hand can do to a record: one thing at a time, and nothing else moves."""
+
+from __future__ import annotations
+
+from typing import Any, get_args
+
+import msgspec
+import pytest
+from hypothesis import given
+from hypothesis import strategies as st
+
+from fourcount.record import editing
+from fourcount.record.entry.table import read_table
+from fourcount.record.outcome import CELLS, DESIGNS, Effect, EventsAndOthers, EventsOfTotal, Layout, Outcome, Patient
+from fourcount.record.paper import FAMILIES, Choices, Record
+
+TABLE = EventsAndOthers(first_left_text="38", first_right_text="1,374", second_left_text="70", second_right_text="338*")
+OUTCOME = Outcome(
+    name_text="Falls",
+    table=TABLE,
+    design="cohort",
+    first_label_text="night lights",
+    second_label_text="usual care",
+    left_heading_text="fell",
+    right_heading_text="did not fall",
+    left_words_text="fell at least once",
+    right_words_text="did not fall",
+    span_text="12 months",
+    patient=Patient(starting_risk_text="12%", starting_risk_source_text="ward audit", effect="odds_ratio"),
+)
+RECORD = Record(title_text="Lights", source_text="Table 2", outcomes=(OUTCOME, Outcome()), choices=Choices())
+TEXT_FIELDS = sorted({*CELLS, *editing.OUTCOME_TEXTS, *editing.PATIENT_TEXTS})
+
+ACTIONS: dict[str, tuple[Any, set[str]]] = {
+    "swap": (editing.swap_groups, {"index_group"}),
+    "count": (editing.count_other_outcome, {"counted"}),
+    "form": (lambda outcome: editing.in_form(outcome, EventsOfTotal), {"table"}),
+    "clear": (editing.clear_table, {"table"}),
+    "design": (lambda outcome: editing.with_design(outcome, "survey"), {"design"}),
+    "welcome": (lambda outcome: editing.with_welcome(outcome, welcome=True), {"left_welcome"}),
+    "layout": (lambda outcome: editing.with_layout(outcome, "across"), {"layout"}),
+    "effect": (lambda outcome: editing.with_effect(outcome, "risk_ratio"), {"patient"}),
+}
+
+
+def changed(before: Any, after: Any) -> set[str]:
+    """The names of the fields that differ."""
+    return {name for name in before.__struct_fields__ if getattr(before, name) != getattr(after, name)}
+
+
+@pytest.mark.parametrize("name", ACTIONS)
+def test_an_action_changes_one_thing(name: str) -> None:
+    """Each action changes its own field and keeps every other."""
+    action, fields = ACTIONS[name]
+    assert changed(OUTCOME, action(OUTCOME)) == fields
+
+
+@pytest.mark.parametrize("name", ACTIONS)
+def test_an_action_leaves_the_earlier_outcome_for_undo(name: str) -> None:
+    """The outcome before an action is untouched, so showing it again undoes the action."""
+    before = msgspec.json.encode(OUTCOME)
+    ACTIONS[name][0](OUTCOME)
+    assert msgspec.json.encode(OUTCOME) == before
+
+
+@pytest.mark.parametrize("field", TEXT_FIELDS)
+def test_text_is_written_where_it_belongs(field: str) -> None:
+    """Each text field of outcome, table and patient takes its text, and no other changes."""
+    edited = editing.edit_text(OUTCOME, field, "new")
+    home = "table" if field in CELLS else "patient" if field in editing.PATIENT_TEXTS else None
+    holder = edited if home is None else getattr(edited, home)
+    assert getattr(holder, field) == "new"
+    assert changed(OUTCOME, edited) == {home or field}
+    if home is not None:
+        assert changed(getattr(OUTCOME, home), holder) == {field}
+
+
+def test_every_text_of_the_record_can_be_edited() -> None:
+    """The paper's own texts are edited beside the outcomes."""
+    for field in editing.RECORD_TEXTS:
+        edited = editing.edit_record_text(RECORD, field, "new")
+        assert getattr(edited, field) == "new"
+        assert changed(RECORD, edited) == {field}
+
+
+@pytest.mark.parametrize("field", ["design", "table", "", "title_text", "no_such_text"])
+def test_only_text_fields_take_text(field: str) -> None:
+    """A field that is no text of an outcome is refused."""
+    with pytest.raises(ValueError, match="none of the possible"):
+        editing.edit_text(OUTCOME, field, "new")
+
+
+@given(st.text(st.characters(exclude_categories=())))
+def test_any_text_can_be_kept_and_saved(text: str) -> None:
+    """Text stays as typed but for lone surrogates, which no file can hold."""
+    kept = editing.edit_text(OUTCOME, "name_text", text).name_text
+    kept.encode()
+    assert kept == "".join("\ufffd" if "\ud800" <= character <= "\udfff" else character for character in text) or (
+        kept == text.encode("utf-16", "surrogatepass").decode("utf-16", "replace")
+    )
+
+
+def test_a_lone_surrogate_becomes_the_mark_of_a_missing_character() -> None:
+    """Half a character is shown as missing, in place; long text is not cut."""
+    assert editing.edit_text(OUTCOME, "name_text", "a\ud800b").name_text == "a\ufffdb"
+    assert editing.edit_text(OUTCOME, "first_left_text", "9" * 10_000).table.first_left_text == "9" * 10_000
+
+
+def test_swapping_twice_is_nothing() -> None:
+    """Two swaps, or counting the other outcome twice, give the outcome back."""
+    assert editing.swap_groups(editing.swap_groups(OUTCOME)) == OUTCOME
+    assert editing.count_other_outcome(editing.count_other_outcome(OUTCOME)) == OUTCOME
+
+
+def test_a_readable_row_takes_the_other_form() -> None:
+    """38 and 374 become 38 of 412; a row that cannot be read keeps its text."""
+    table = editing.in_form(OUTCOME, EventsOfTotal).table
+    assert table == EventsOfTotal(
+        first_left_text="38", first_right_text="1412", second_left_text="70", second_right_text="338*"
+    )
+
+
+def test_the_form_it_has_changes_nothing() -> None:
+    """Asking for the form that the table has gives the same outcome."""
+    assert editing.in_form(OUTCOME, EventsAndOthers) is OUTCOME
+
+
+@pytest.mark.parametrize(("left", "right"), [("38/412", ""), ("", "374/412"), ("38 (9.2%)", "374"), ("38", "374/412")])
+def test_a_total_in_a_cell_survives_the_other_form(left: str, right: str) -> None:
+    """A row that says its total in one cell gives the same counts in the other form, and back."""
+    row = EventsAndOthers(first_left_text=left, first_right_text=right)
+    there = editing.in_form(Outcome(table=row), EventsOfTotal)
+    back = editing.in_form(there, EventsAndOthers)
+    for outcome in (there, back):
+        reading = read_table(outcome.table)
+        assert (reading.first.left, reading.first.right, reading.first.total) == (38, 374, 412)
+        assert not reading.marks
+
+
+@given(st.lists(st.integers(0, 10**8), min_size=4, max_size=4))
+def test_the_other_form_and_back_keeps_every_count(counts: list[int]) -> None:
+    """Four plain counts come back as they were typed."""
+    outcome = Outcome(table=EventsAndOthers(**dict(zip(CELLS, map(str, counts), strict=True))))
+    there = editing.in_form(outcome, EventsOfTotal)
+    assert read_table(there.table) == read_table(outcome.table)
+    assert editing.in_form(there, EventsAndOthers) == outcome
+
+
+@pytest.mark.parametrize("welcome", [True, False])
+@pytest.mark.parametrize("turned", [True, False])
+def test_welcome_is_said_of_the_counted_outcome(welcome: bool, turned: bool) -> None:
+    """Whichever column is counted, it is the one that is called welcome or not."""
+    outcome = editing.count_other_outcome(OUTCOME) if turned else OUTCOME
+    assert editing.with_welcome(outcome, welcome=welcome).welcome is welcome
+
+
+def test_choices_take_only_what_there_is() -> None:
+    """Every design, layout, effect and family can be chosen, and nothing else."""
+    for design in DESIGNS:
+        assert editing.with_design(OUTCOME, design).design == design
+    for layout in get_args(Layout):
+        assert editing.with_layout(OUTCOME, layout).layout == layout
+    for effect in get_args(Effect):
+        assert editing.with_effect(OUTCOME, effect).patient.effect == effect
+    for family in FAMILIES:
+        assert editing.with_family(RECORD, family).choices.family == family
+    wrong: Any = "guess"
+    for refuse in (editing.with_design, editing.with_layout, editing.with_effect):
+        with pytest.raises(ValueError, match="guess"):
+            refuse(OUTCOME, wrong)
+    with pytest.raises(ValueError, match="guess"):
+        editing.with_family(RECORD, wrong)
+
+
+def test_a_level_stays_within_its_range() -> None:
+    """A level from 80% to 99.9% is taken as it is; any other is refused."""
+    assert editing.with_level(RECORD, 0.999).choices == Choices(level=0.999)
+    for wrong in (0.79, 1.0, 95, float("nan")):
+        with pytest.raises(ValueError, match="level"):
+            editing.with_level(RECORD, wrong)
+
+
+def test_one_outcome_of_a_record_is_replaced() -> None:
+    """The outcome at its place changes, its neighbours stay."""
+    new = editing.with_design(OUTCOME, "survey")
+    assert editing.with_outcome(RECORD, 1, new).outcomes == (OUTCOME, new)
+    assert changed(RECORD, editing.with_outcome(RECORD, 0, new)) == {"outcomes"}
+    for place in (-1, 2):
+        with pytest.raises(IndexError):
+            editing.with_outcome(RECORD, place, new)
