@@ -19,7 +19,9 @@ import math
 from collections.abc import Callable
 from functools import partial
 
-from fourcount.stats.hypergeometric import Array, Window, support, undetermined
+import numpy as np
+
+from fourcount.stats.hypergeometric import Array, Window, product_sum, support, undetermined
 from fourcount.stats.results import Counts, Gap, Interval
 from fourcount.stats.tails import first_guess, rising_root, widened
 
@@ -56,11 +58,12 @@ def _lower_tilt(near: Window, unlikely: float, own: float) -> float | None:
     """The least tilt at which the sum exceeds ``unlikely``; None if the window proves too narrow."""
     # Tilts at which the tables below the observed one join the sum: they rise with the table.
     jumps = near.log_weights[: near.observed] / -near.steps[: near.observed]
-    at = _first_top(near, jumps, unlikely, own)
+    room = np.empty_like(near.steps)
+    at = _first_top(near, jumps, unlikely, own, room)
     if at == 0 and not near.whole_below:
         return None
     tilt = float(jumps[at])
-    top = _Sum(near, tilt, own)
+    top = _Sum(near, tilt, own, room)
     if not top.held:
         return None
     if top.value(at) <= unlikely:
@@ -68,24 +71,24 @@ def _lower_tilt(near: Window, unlikely: float, own: float) -> float | None:
     goal = math.log(unlikely)
 
     def log_sum(tilt: float) -> tuple[float, float]:
-        looked_at = _Sum(near, tilt, own)
+        looked_at = _Sum(near, tilt, own, room)
         value = looked_at.value(at)
         return (math.log(value) - goal, looked_at.slope(at) / value) if value > 0 else (-math.inf, 0.0)
 
     return rising_root(log_sum, tilt, below=float(jumps[at - 1]) if at > 0 else -math.inf)
 
 
-def _first_top(near: Window, jumps: Array, unlikely: float, own: float) -> int:
+def _first_top(near: Window, jumps: Array, unlikely: float, own: float, room: Array) -> int:
     """The place of the first jump at whose top the sum exceeds ``unlikely``, found from a guess outwards."""
     last = len(jumps) - 1
     guess = min(int(jumps.searchsorted(first_guess(near.spread, unlikely / 2))), last)
-    top = _Sum(near, float(jumps[guess]), own)
+    top = _Sum(near, float(jumps[guess]), own, room)
     value = top.value(guess + 1)
     if 0 < guess < last and value > 0:
         # On the tops, both tails shrink alike: the upper one's slope tells how many jumps are between.
         rise = top.upper_slope() * float(jumps[guess] - jumps[guess - 1])
         guess = max(0, min(last, guess + math.ceil((math.log(unlikely) - math.log(value)) / rise)))
-    return _halved(lambda at: _Sum(near, float(jumps[at]), own).value(at + 1) > unlikely, guess, last)
+    return _halved(lambda at: _Sum(near, float(jumps[at]), own, room).value(at + 1) > unlikely, guess, last)
 
 
 def _halved(exceeds: Callable[[int], bool], guess: int, last: int) -> int:
@@ -110,13 +113,13 @@ def _halved(exceeds: Callable[[int], bool], guess: int, last: int) -> int:
 class _Sum:
     """The probabilities at one tilt, asked for the sum over the observed table, those above and the lowest ones."""
 
-    def __init__(self, near: Window, tilt: float, own: float) -> None:
+    def __init__(self, near: Window, tilt: float, own: float, room: Array) -> None:
         self._steps = near.steps
         self._observed = near.observed
-        self._weights = near.weights(tilt)
+        self._weights = near.weights(tilt, room)
         self._total = float(self._weights.sum())
         self.held = near.holds(self._weights, self._total)
-        self._mean = float(self._weights @ near.steps) / self._total
+        self._mean = product_sum(self._weights, near.steps) / self._total
         self._weights[near.observed] *= own
         self._upper = float(self._weights[near.observed :].sum())
 
@@ -126,7 +129,7 @@ class _Sum:
 
     def slope(self, lowest: int) -> float:
         """Its derivative by the tilt, while the tables in it stay the same."""
-        inner = float(self._weights[:lowest] @ self._steps[:lowest]) + self._upper_moment()
+        inner = product_sum(self._weights[:lowest], self._steps[:lowest]) + self._upper_moment()
         return inner / self._total - self._mean * self.value(lowest)
 
     def upper_slope(self) -> float:
@@ -134,4 +137,4 @@ class _Sum:
         return self._upper_moment() / self._upper - self._mean
 
     def _upper_moment(self) -> float:
-        return float(self._weights[self._observed :] @ self._steps[self._observed :])
+        return product_sum(self._weights[self._observed :], self._steps[self._observed :])

@@ -12,9 +12,11 @@ from __future__ import annotations
 import math
 from functools import partial
 
+import numpy as np
+
 from fourcount.stats.baptista_pike import baptista_pike, baptista_pike_mid_p
 from fourcount.stats.fisher import fisher, fisher_greater, fisher_less, fisher_mid_p
-from fourcount.stats.hypergeometric import Window, support, undetermined, window
+from fourcount.stats.hypergeometric import Array, Window, product_sum, support, undetermined, window
 from fourcount.stats.results import Counts, Gap, Interval
 from fourcount.stats.tails import odds_ratio_at_tail, rising_root
 
@@ -54,7 +56,7 @@ def conditional_odds_ratio(counts: Counts) -> float | Gap:
     if greatest == 0:
         return math.inf
     near = window(counts)
-    return near.centre * math.exp(rising_root(partial(_mean_step, near), 0.0))
+    return near.centre * math.exp(rising_root(partial(_mean_step, near, np.empty_like(near.steps)), 0.0))
 
 
 def _interval(counts: Counts, level: float, own: float) -> Interval | Gap:
@@ -68,11 +70,11 @@ def _interval(counts: Counts, level: float, own: float) -> Interval | Gap:
     )
 
 
-def _mean_step(near: Window, tilt: float) -> tuple[float, float]:
+def _mean_step(near: Window, room: Array, tilt: float) -> tuple[float, float]:
     """The mean distance from the observed table and its derivative, both in standard deviations."""
-    weights = near.weights(tilt)
+    weights = near.weights(tilt, room)
     total = float(weights.sum())
-    mean = float(weights @ near.steps) / total
+    mean = product_sum(weights, near.steps) / total
     weights *= near.steps
-    spread = math.sqrt(max(float(weights @ near.steps) / total - mean * mean, 0.0))
+    spread = math.sqrt(max(product_sum(weights, near.steps) / total - mean * mean, 0.0))
     return (mean / spread, spread) if spread > 0 else (math.copysign(1.0, mean), 0.0)

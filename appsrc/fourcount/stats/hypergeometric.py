@@ -26,6 +26,7 @@ NEGLIGIBLE = 1e-17
 _WHOLE_SUPPORT = 256
 """A support up to this long is always taken whole."""
 
+_PIECE = 8192
 _REACH = 9.0
 _MARGIN = 40.0
 _FARTHEST_Z = 3.5
@@ -50,9 +51,9 @@ class Window:
     whole_below: bool
     whole_above: bool
 
-    def weights(self, tilt: float) -> Array:
-        """Weights at the odds ratio centre * exp(tilt), the greatest of them 1."""
-        weights = self.steps * tilt
+    def weights(self, tilt: float, out: Array | None = None) -> Array:
+        """Weights at the odds ratio centre * exp(tilt), the greatest of them 1; written into ``out`` if given."""
+        weights = np.multiply(self.steps, tilt, out=out)
         weights += self.log_weights
         weights -= weights.max()
         return np.exp(weights, out=weights)
@@ -81,6 +82,16 @@ def _rest(edge: float, before: float) -> float:
     if edge == 0.0:
         return 0.0
     return edge * edge / (before - edge) if before > edge else math.inf
+
+
+def product_sum(left: Array, right: Array) -> float:
+    """The sum of products, in pieces too short for the linear algebra library to start threads for them.
+
+    Threads wake slowly on a busy machine, and sums of pieces also round less.
+    """
+    if len(left) <= _PIECE:
+        return float(left @ right)
+    return math.fsum(float(left[at : at + _PIECE] @ right[at : at + _PIECE]) for at in range(0, len(left), _PIECE))
 
 
 def support(counts: Counts) -> tuple[int, int]:

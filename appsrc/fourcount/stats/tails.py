@@ -6,7 +6,9 @@ import math
 from collections.abc import Callable
 from functools import partial
 
-from fourcount.stats.hypergeometric import Window, window
+import numpy as np
+
+from fourcount.stats.hypergeometric import Window, product_sum, window
 from fourcount.stats.results import Counts
 
 _ENOUGH = 1e-15
@@ -73,19 +75,21 @@ def _lower_tilt(near: Window, tail: float, own: float) -> float | None:
     """
     goal = math.log(tail)
     held = False
+    room = np.empty_like(near.steps)
+    outer_steps = near.steps[near.observed :]
 
     def log_tail(tilt: float) -> tuple[float, float]:
         nonlocal held
-        weights = near.weights(tilt)
+        weights = near.weights(tilt, room)
         total = float(weights.sum())
         held = near.holds(weights, total)
-        mean = float(weights @ near.steps) / total
+        mean = product_sum(weights, near.steps) / total
         weights[near.observed] *= own
         outer = weights[near.observed :]
         outer_total = float(outer.sum())
         if outer_total == 0.0:
             return -math.inf, 0.0
-        outer_mean = float(outer @ near.steps[near.observed :]) / outer_total
+        outer_mean = product_sum(outer, outer_steps) / outer_total
         return math.log(outer_total / total) - goal, outer_mean - mean
 
     tilt = rising_root(log_tail, first_guess(near.spread, tail))
