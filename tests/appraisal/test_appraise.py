@@ -1,0 +1,123 @@
+"""Tests of the whole: memory, figures that follow, and what is loaded."""
+
+from __future__ import annotations
+
+import subprocess
+import sys
+
+import pytest
+
+from fourcount.appraisal import appraise as module
+from fourcount.appraisal.appraise import appraise
+from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded
+from fourcount.appraisal.postponing import NEED_NUMPY, numbers_loaded, postponed
+from fourcount.record.paper import Choices
+from fourcount.stats.methods import FAMILIES
+from fourcount.stats.results import Counts
+
+EXACT = Choices(family="exact")
+HUGE = (4 * 10**8, 6 * 10**8, 3 * 10**8, 7 * 10**8)
+
+
+def test_equal_outcomes_have_one_answer(study):
+    """An outcome that is equal to an earlier one is not computed again."""
+    assert appraise(study(3, 7, 5, 5), Choices()) is appraise(study(3, 7, 5, 5), Choices())
+
+
+def test_memory_is_bounded():
+    """The memory of answers has an end."""
+    assert module.REMEMBERED == module._appraise.cache_info().maxsize
+
+
+@pytest.mark.parametrize("family", ["score", "textbook"])
+def test_a_quick_family_never_follows(study, family, monkeypatch):
+    """Closed forms need nothing loaded: deferring changes nothing."""
+    monkeypatch.setattr(module, "numbers_loaded", lambda: False)
+    choices = Choices(family=family)
+    assert appraise(study(*HUGE), choices, deferring=True) is appraise(study(*HUGE), choices)
+
+
+def test_exact_figures_follow_until_the_libraries_are_loaded(study, monkeypatch):
+    """Before the libraries are loaded the exact intervals and p follow, while estimates and closed forms stand."""
+    monkeypatch.setattr(module, "numbers_loaded", lambda: False)
+    findings = appraise(study(38, 374, 70, 339), EXACT, deferring=True)
+    for key in ("risk_index", "risk_reference", "odds_index", "odds_reference", "odds_ratio"):
+        figure = findings.measures[key]
+        assert isinstance(figure, Figure)
+        assert isinstance(figure.estimate, float)
+        assert Gap("follows") == figure.interval
+    assert Gap("follows") == findings.test.p
+    assert isinstance(findings.measures["risk_difference"].interval, Interval)
+    assert isinstance(findings.measures["number_needed"], NumberNeeded)
+    assert Gap("follows") == findings.conversion.risk_ratio.interval
+
+
+def test_exact_figures_are_there_once_the_libraries_are_loaded(study, monkeypatch):
+    """The answer that waits for the libraries is not the one remembered after they have come."""
+    outcome = study(38, 374, 70, 338)
+    monkeypatch.setattr(module, "numbers_loaded", lambda: False)
+    assert Gap("follows") == appraise(outcome, EXACT, deferring=True).test.p
+    monkeypatch.setattr(module, "numbers_loaded", lambda: True)
+    assert appraise(outcome, EXACT) == appraise(outcome, EXACT, deferring=True)
+    assert isinstance(appraise(outcome, EXACT, deferring=True).test.p, float)
+
+
+def test_a_slow_figure_follows(study, monkeypatch):
+    """At hundreds of millions a cell the exact odds ratio and p follow, the exact risks do not."""
+    monkeypatch.setattr(module, "numbers_loaded", lambda: True)
+    findings = appraise(study(*HUGE), EXACT, deferring=True)
+    assert Gap("follows") == findings.measures["odds_ratio"].interval
+    assert Gap("follows") == findings.test.p
+    assert isinstance(findings.measures["risk_index"].interval, Interval)
+
+
+def test_nothing_follows_unless_asked(study, monkeypatch):
+    """Without deferring every figure is computed, whatever is loaded."""
+    monkeypatch.setattr(module, "numbers_loaded", lambda: False)
+    assert isinstance(appraise(study(38, 374, 70, 337), EXACT).test.p, float)
+
+
+def test_what_needs_numpy_is_the_exact_familys_own():
+    """The postponed methods are those of the exact family that the score family does not share."""
+    exact, score = FAMILIES["exact"], FAMILIES["score"]
+    methods = {exact.risk, exact.risk_difference, exact.risk_ratio, exact.odds_ratio, exact.test}
+    assert methods - {score.risk, score.risk_difference, score.risk_ratio, score.odds_ratio} == NEED_NUMPY
+
+
+def test_a_small_table_postpones_nothing_once_loaded():
+    """A small table is quick in every family."""
+    small = Counts(index_events=3, index_non_events=7, reference_events=5, reference_non_events=5)
+    assert frozenset() == postponed(small, EXACT, loaded=True)
+    assert frozenset() == postponed(small, Choices(), loaded=False)
+
+
+def test_a_library_in_the_middle_of_its_import_is_not_loaded(monkeypatch):
+    """Whoever used a half-imported library would wait for it, so it does not count as loaded."""
+    import scipy.special
+
+    assert numbers_loaded()
+    monkeypatch.setattr(scipy.special.__spec__, "_initializing", True, raising=False)
+    assert not numbers_loaded()
+
+
+LIGHT = """
+import sys
+from fourcount.appraisal.appraise import appraise
+from fourcount.appraisal.every import every_method
+from fourcount.record.outcome import EventsAndOthers, Outcome, Patient
+from fourcount.record.paper import Choices
+table = EventsAndOthers(first_left_text="38", first_right_text="374", second_left_text="70", second_right_text="339")
+for family in ("score", "textbook"):
+    appraise(Outcome(table=table, patient=Patient(starting_risk_text="12%")), Choices(family=family))
+deferred = appraise(Outcome(table=table), Choices(family="exact"), deferring=True)
+assert deferred.test.p.key == "follows", deferred.test
+heavy = {"numpy", "scipy", "PySide6"} & {name.partition(".")[0] for name in sys.modules}
+assert not heavy, heavy
+"""
+
+
+def test_score_and_textbook_load_no_library():
+    """A fresh interpreter appraises by closed forms, and defers the exact family, without numpy, scipy or Qt."""
+    done = subprocess.run([sys.executable, "-c", LIGHT], capture_output=True, text=True, check=False)
+    assert "" == done.stderr
+    assert 0 == done.returncode

@@ -1,0 +1,279 @@
+"""Tests of each caution: where it holds, and just beside it where it does not."""
+
+from __future__ import annotations
+
+import math
+
+import pytest
+
+from fourcount.appraisal.cautions import CAUTIONS
+
+TABLE = (38, 374, 70, 339)
+
+
+@pytest.fixture
+def facts(appraised):
+    """The facts of the cautions that hold, by key; several cautions of one key in a list."""
+
+    def of(*cells, **rest):
+        found = {}
+        for caution in appraised(*cells, **rest).cautions:
+            found.setdefault(caution.key, []).append(caution.facts)
+        return found
+
+    return of
+
+
+def test_the_keys_in_order():
+    """What changes the reader's conclusion comes first."""
+    assert [
+        "odds-ratio-differs", "effect-kept-constant", "baseline-far", "baseline-uncertain", "rests-on-baseline",
+        "controls-over-time", "observational", "converted-limits", "zero-cells", "half-added", "through-no-effect",
+        "family-parts", "rare-harm", "leans",
+    ] == list(dict.fromkeys(rule.key for rule in CAUTIONS))  # fmt: skip
+
+
+def test_every_rule_names_its_source():
+    """No caution stands on nothing."""
+    assert all(rule.source for rule in CAUTIONS)
+
+
+def test_a_plain_trial_has_no_caution(facts):
+    """A trial without zeros, with an interval on one side and the two ratios close together, needs none."""
+    assert {} == facts(*TABLE)
+
+
+def test_nothing_is_cautioned_without_counts(appraised):
+    """An empty table has no cautions."""
+    assert () == appraised("", "", "", "", design="cohort", baseline="12%").cautions
+
+
+# The quotient of the two ratios is the reference group's risk of not having the event over the index group's.
+@pytest.mark.parametrize(
+    ("cells", "holds"),
+    [
+        ((50, 50, 40, 60), False),  # exactly 1.2
+        ((50, 50, 39, 61), True),
+        ((40, 60, 50, 50), False),  # the same, groups swapped
+        ((39, 61, 50, 50), True),
+        ((50, 50, 50, 50), False),
+    ],
+)
+def test_odds_ratio_differs_over_20_percent(facts, cells, holds):
+    """The odds ratio is over 20% from the risk ratio, in either direction."""
+    assert holds == ("odds-ratio-differs" in facts(*cells))
+
+
+def test_odds_ratio_differs_tells_both(facts):
+    """The facts are the two ratios."""
+    assert [{"odds_ratio": 4.0, "risk_ratio": 1.6}] == facts(80, 20, 50, 50)["odds-ratio-differs"]
+
+
+def test_odds_ratio_differs_where_it_is_endless(facts):
+    """Everybody in the index group: the odds ratio is infinite and the risk ratio 2."""
+    assert [{"odds_ratio": math.inf, "risk_ratio": 2.0}] == facts(20, 0, 10, 10)["odds-ratio-differs"]
+
+
+@pytest.mark.parametrize("cells", [(0, 20, 10, 10), (10, 10, 0, 20), (0, 20, 0, 20), (20, 0, 20, 0)])
+def test_odds_ratio_differs_not_where_both_are_alike_or_missing(facts, cells):
+    """Both 0, both infinite, or one without a value: nothing to tell apart."""
+    assert "odds-ratio-differs" not in facts(*cells)
+
+
+def test_odds_ratio_differs_not_in_a_case_control_study(facts):
+    """A case-control study has no risk ratio to differ from."""
+    assert "odds-ratio-differs" not in facts(80, 20, 50, 50, design="case-control")
+
+
+@pytest.mark.parametrize("design", ["trial", "cohort", "survey"])
+def test_effect_kept_constant(facts, design):
+    """A typed starting risk takes the relative effect elsewhere; the facts tell which and from where."""
+    (found,) = facts(*TABLE, design=design, baseline="12%")["effect-kept-constant"]
+    assert ("risk_ratio", 0.12) == (found["effect"], found["baseline"])
+    assert math.isclose((38 / 412) / (70 / 409), found["value"])
+    assert math.isclose(70 / 409, found["study"])
+
+
+@pytest.mark.parametrize("rest", [{}, {"design": "case-control", "baseline": "12%"}, {"baseline": "x"}])
+def test_effect_kept_constant_not_without_another_risk(facts, rest):
+    """The table's own risk, a study without risks, and an unreadable risk carry nothing elsewhere."""
+    assert "effect-kept-constant" not in facts(*TABLE, **rest)
+
+
+@pytest.mark.parametrize(
+    ("baseline", "far"), [("5%", False), ("4.9%", True), ("20%", False), ("20.1%", True), ("10%", False)]
+)
+def test_baseline_far_beyond_half_or_twice(facts, baseline, far):
+    """Half and twice the study's 10% are still near."""
+    assert far == ("baseline-far" in facts(8, 92, 10, 90, baseline=baseline))
+
+
+def test_baseline_far_tells_both_risks(facts):
+    """The facts are the typed risk and the study's."""
+    assert [{"baseline": 0.5, "study": 0.1}] == facts(8, 92, 10, 90, baseline="50%")["baseline-far"]
+
+
+def test_baseline_far_not_in_a_case_control_study(facts):
+    """A case-control study has no risk to be far from."""
+    assert "baseline-far" not in facts(8, 92, 10, 90, baseline="90%", design="case-control")
+
+
+@pytest.mark.parametrize("design", ["trial", "case-control"])
+def test_baseline_uncertain_with_a_bare_risk(facts, design):
+    """A bare value brings no uncertainty of its own, in any design."""
+    assert [{"baseline": 0.12}] == facts(*TABLE, baseline="12%", design=design)["baseline-uncertain"]
+
+
+def test_baseline_uncertain_not_for_the_tables_own_risk(facts):
+    """The table's direct intervals leave nothing out."""
+    assert "baseline-uncertain" not in facts(*TABLE)
+
+
+def test_baseline_uncertain_not_without_a_range(facts):
+    """Where no range is given nothing is said of it."""
+    assert "baseline-uncertain" not in facts(5, 0, 8, 0, baseline="12%", family="textbook")
+
+
+def test_a_case_control_study_with_a_starting_risk_rests_on_it(facts):
+    """Every absolute figure rests on the typed risk, and the controls' sampling decides what the ratio is."""
+    found = facts(*TABLE, design="case-control", baseline="12%")
+    assert [{"baseline": 0.12}] == found["rests-on-baseline"]
+    assert [{}] == found["controls-over-time"]
+
+
+@pytest.mark.parametrize("rest", [{"design": "case-control"}, {"design": "cohort", "baseline": "12%"}])
+def test_rests_on_baseline_not_otherwise(facts, rest):
+    """Without a typed risk nothing is carried; a cohort has risks of its own."""
+    found = facts(*TABLE, **rest)
+    assert "rests-on-baseline" not in found
+    assert "controls-over-time" not in found
+
+
+@pytest.mark.parametrize("design", ["cohort", "survey", "case-control"])
+def test_observational_designs(facts, design):
+    """Without randomisation the crude effect may be confounded."""
+    assert [{"design": design}] == facts(*TABLE, design=design)["observational"]
+
+
+def test_converted_limits_with_a_typed_risk(facts):
+    """The odds ratio's limits are converted at a risk that is taken as certain."""
+    assert [{"baseline": 0.12}] == facts(*TABLE, baseline="12%")["converted-limits"]
+    assert "converted-limits" not in facts(*TABLE)
+
+
+def test_converted_limits_not_without_limits(facts):
+    """An odds ratio without an interval has no limits to convert."""
+    assert "converted-limits" not in facts(0, 0, 8, 5, baseline="12%")
+
+
+@pytest.mark.parametrize(
+    ("cells", "count"), [((0, 20, 3, 17), 1), ((0, 20, 0, 20), 2), ((0, 20, 20, 0), 2), ((0, 0, 3, 7), 2)]
+)
+def test_zero_cells_are_counted(facts, cells, count):
+    """The number of counts that are 0."""
+    assert [{"count": count}] == facts(*cells)["zero-cells"]
+
+
+def test_half_added_names_each_measure(facts):
+    """The textbook family adds 1/2 for the risk ratio and for the odds ratio where there are no events."""
+    found = facts(0, 20, 3, 17, family="textbook")["half-added"]
+    assert [{"measure": "risk_ratio"}, {"measure": "odds_ratio"}] == found
+
+
+def test_half_added_for_the_odds_ratio_alone(facts):
+    """With a zero among the non-events the risk ratio's formula needs no correction."""
+    assert [{"measure": "odds_ratio"}] == facts(20, 0, 15, 5, family="textbook")["half-added"]
+
+
+def test_half_added_to_a_case_control_studys_odds_ratio_alone(facts):
+    """A withheld measure has no correction to tell."""
+    found = facts(0, 20, 3, 17, family="textbook", design="case-control")["half-added"]
+    assert [{"measure": "odds_ratio"}] == found
+
+
+@pytest.mark.parametrize(("cells", "family"), [((0, 20, 3, 17), "score"), (TABLE, "textbook")])
+def test_half_added_not_where_nothing_was_added(facts, cells, family):
+    """The score family adds nothing, and the textbook family nothing where no count is 0."""
+    assert "half-added" not in facts(*cells, family=family)
+
+
+@pytest.mark.parametrize(("cells", "through"), [((10, 90, 12, 88), True), (TABLE, False), ((0, 20, 0, 20), True)])
+@pytest.mark.parametrize("design", ["trial", "case-control"])
+def test_through_no_effect(facts, cells, through, design):
+    """An interval that holds both fewer and more, by the odds ratio where there is no difference."""
+    assert through == ("through-no-effect" in facts(*cells, design=design))
+
+
+def test_through_no_effect_by_the_odds_ratio_where_the_difference_has_no_interval(facts):
+    """5/5 v 8/8: the textbook difference has no interval, and the odds ratio's decides."""
+    found = facts(0, 20, 0, 20, family="textbook")
+    assert ("through-no-effect" in found) == ("half-added" in found)
+
+
+def test_family_parts_where_p_and_interval_differ(facts):
+    """7/34 v 1/34: Fisher's p is over 0.05 while the exact family's asymptotic difference is above 0."""
+    assert [{}] == facts(7, 27, 1, 33, family="exact")["family-parts"]
+    assert "family-parts" not in facts(7, 27, 1, 33)
+
+
+def test_family_parts_follows_the_level(facts):
+    """At 80% p and intervals agree that there is an effect."""
+    assert "family-parts" not in facts(7, 27, 1, 33, family="exact", level=0.8)
+
+
+def test_family_parts_not_while_the_test_has_no_value(facts):
+    """A table with one outcome only has nothing to part."""
+    assert "family-parts" not in facts(0, 20, 0, 20, family="textbook")
+
+
+@pytest.mark.parametrize(
+    ("cells", "rest", "holds"),
+    [
+        ((9, 991, 1, 999), {}, True),
+        ((10, 990, 1, 999), {}, False),  # exactly 1%
+        ((9, 991, 9, 991), {}, False),  # no more frequent
+        ((1, 999, 9, 991), {}, False),
+        ((9, 991, 1, 999), {"left_welcome": True}, False),
+        ((9, 991, 1, 999), {"design": "cohort"}, False),
+        ((9, 991, 1, 999), {"design": "case-control"}, False),
+    ],
+)
+def test_rare_harm(facts, cells, rest, holds):
+    """In a trial, an unwelcome event under 1% that is more frequent in the index group."""
+    assert ([{"risk": 0.009}] if holds else None) == facts(*cells, **rest).get("rare-harm")
+
+
+def test_leans_to_more(facts):
+    """A risk ratio is symmetric on its logarithm, so a difference through 0 reaches further towards more."""
+    assert [{"side": "more"}] == facts(10, 90, 12, 88, baseline="12%")["leans"]
+
+
+def test_leans_not_towards_the_estimates_own_side(facts):
+    """An estimate on the side of more that reaches further towards more misleads nobody."""
+    assert "leans" not in facts(12, 88, 10, 90, baseline="12%")
+
+
+@pytest.mark.parametrize("rest", [{}, {"baseline": "x"}])
+def test_leans_not_without_a_typed_risk(facts, rest):
+    """The table's direct interval of the difference is not derived from a ratio."""
+    assert "leans" not in facts(10, 90, 12, 88, **rest)
+
+
+def test_leans_not_where_no_effect_is_outside(facts):
+    """A difference whose interval lies on one side leans nowhere."""
+    assert "leans" not in facts(*TABLE, baseline="12%")
+
+
+def test_leans_where_the_upper_limit_is_withheld(facts):
+    """A limit that passes 100% reaches further than any other."""
+    assert [{"side": "more"}] == facts(10, 90, 12, 88, baseline="70%")["leans"]
+
+
+def test_leans_to_fewer_by_odds_at_a_high_risk(facts):
+    """Near 100% an odds ratio reaches further down than up."""
+    assert [{"side": "fewer"}] == facts(21, 79, 20, 80, baseline="95%", effect="odds_ratio")["leans"]
+
+
+def test_leans_not_where_the_estimate_is_no_effect(facts):
+    """An estimate of no difference has no side."""
+    assert "leans" not in facts(10, 90, 10, 90, baseline="12%")
