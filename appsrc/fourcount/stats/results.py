@@ -18,6 +18,7 @@ GAP_KEYS = (
     "one-outcome-only",  # one column is all zero: the odds ratio is not determined by the table
     "zero-width",  # the bare formula would give an interval of zero width
     "beyond-one",  # a risk would pass 100%
+    "infinite-at-zero",  # an infinite effect at a starting risk of 0: 0 times infinity is not determined
     "beyond-zero",  # a risk would fall below 0
 )
 """Every reason for which a function of this folder gives no figure."""

@@ -1,0 +1,38 @@
+"""Two-sided p values of no association, from the chi-square statistic without a correction for continuity."""
+
+from __future__ import annotations
+
+import math
+
+from fourcount.stats.estimates import without_people
+from fourcount.stats.normal import two_sided_p
+from fourcount.stats.results import Counts, Gap
+
+
+def pearson(counts: Counts) -> float | Gap:
+    """Pearson's chi-square test: N (ad - bc)^2 / (n1 n2 m (N - m)), one degree of freedom.
+
+    Where everybody had the event, or nobody, the groups do not differ and p is 1. Source: Pearson 1900.
+    """
+    return _chi_square_p(counts, counts.total)
+
+
+def n_minus_1(counts: Counts) -> float | Gap:
+    """The (N-1) chi-square test: Pearson's statistic times (N-1)/N.
+
+    It is the square of the Miettinen-Nurminen statistics of the difference, the ratio and the odds ratio at no
+    effect, so that it agrees with their intervals. Source: E. S. Pearson 1947; Campbell 2007, Stat Med 26:3661
+    (from memory).
+    """
+    return _chi_square_p(counts, counts.total - 1)
+
+
+def _chi_square_p(counts: Counts, weight: int) -> float | Gap:
+    gap = without_people(counts)
+    if gap is not None:
+        return gap
+    if counts.events == 0 or counts.non_events == 0:
+        return 1.0
+    across = counts.index_events * counts.reference_non_events - counts.index_non_events * counts.reference_events
+    margins = counts.index_total * counts.reference_total * counts.events * counts.non_events
+    return two_sided_p(math.sqrt(weight * across * across / margins))

@@ -1,0 +1,174 @@
+"""Intervals of the risk difference D = p1 - p2, index minus reference."""
+
+from __future__ import annotations
+
+import math
+
+from fourcount.stats.estimates import without_people
+from fourcount.stats.normal import quantile
+from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.risk import score_limits
+from fourcount.stats.roots import increasing_root
+from fourcount.stats.score import mirrored, target
+
+
+def miettinen_nurminen(counts: Counts, level: float) -> Interval | Gap:
+    """The score interval with the variance times N/(N-1) (Miettinen and Nurminen 1985, Stat Med 4:213).
+
+    The lower limit is exactly -1 where the difference is -1, the upper exactly 1 where it is 1.
+    """
+    return _score(counts, level, finite=True)
+
+
+def mee(counts: Counts, level: float) -> Interval | Gap:
+    """The score interval without that factor (Mee 1984; Newcombe's method 5)."""
+    return _score(counts, level, finite=False)
+
+
+def newcombe(counts: Counts, level: float) -> Interval | Gap:
+    """The hybrid score interval (Newcombe 1998, Stat Med 17:873, method 10).
+
+    The distances from each risk to its Wilson limits, squared and added.
+    """
+    return _square_and_add(counts, level, correction=0.0)
+
+
+def newcombe_continuity(counts: Counts, level: float) -> Interval | Gap:
+    """The same from Wilson limits with a correction for continuity (Newcombe's method 11)."""
+    return _square_and_add(counts, level, correction=0.5)
+
+
+def wald(counts: Counts, level: float) -> Interval | Gap:
+    """The textbook interval D -+ z sqrt(p1(1-p1)/n1 + p2(1-p2)/n2), given as it is where it leaves -1 to 1.
+
+    Its width is zero where each group has a risk of 0 or 1: a gap.
+    """
+    gap = without_people(counts)
+    if gap is not None:
+        return gap
+    if 0 in (counts.index_events, counts.index_non_events) and 0 in (
+        counts.reference_events,
+        counts.reference_non_events,
+    ):
+        return Gap("zero-width")
+    return _plain(counts, level)
+
+
+def agresti_caffo(counts: Counts, level: float) -> Interval | Gap:
+    """Wald's interval after adding one to each of the four counts (Agresti and Caffo 2000, Am Stat 54:280).
+
+    It can leave -1 to 1, and then does not hold a difference of -1 or 1; it is given as it is.
+    """
+    gap = without_people(counts)
+    if gap is not None:
+        return gap
+    added = Counts(
+        index_events=counts.index_events + 1,
+        index_non_events=counts.index_non_events + 1,
+        reference_events=counts.reference_events + 1,
+        reference_non_events=counts.reference_non_events + 1,
+    )
+    return _plain(added, level)
+
+
+def _estimate(counts: Counts) -> float:
+    across = counts.index_events * counts.reference_total - counts.reference_events * counts.index_total
+    return across / (counts.index_total * counts.reference_total)
+
+
+def _plain(counts: Counts, level: float) -> Interval:
+    index = counts.index_events * counts.index_non_events / counts.index_total**3
+    reference = counts.reference_events * counts.reference_non_events / counts.reference_total**3
+    half_width = quantile(level) * math.sqrt(index + reference)
+    estimate = _estimate(counts)
+    return Interval(low=estimate - half_width, high=estimate + half_width)
+
+
+def _square_and_add(counts: Counts, level: float, *, correction: float) -> Interval | Gap:
+    gap = without_people(counts)
+    if gap is not None:
+        return gap
+    z = quantile(level)
+    index_below, index_above = _distances(counts.index_events, counts.index_total, z, correction)
+    reference_below, reference_above = _distances(counts.reference_events, counts.reference_total, z, correction)
+    estimate = _estimate(counts)
+    return Interval(
+        low=estimate - math.hypot(index_below, reference_above),
+        high=estimate + math.hypot(index_above, reference_below),
+    )
+
+
+def _distances(events: int, total: int, z: float, correction: float) -> tuple[float, float]:
+    """How far the Wilson limits lie below and above the risk.
+
+    A limit L solves |p - L| = z sqrt(L(1-L)/n), plus 1/(2n) where continuity is corrected for; taking the right
+    side keeps the digits that p - L would lose in a large group.
+    """
+    step = correction / total
+    below = above = 0.0
+    if events > 0:
+        low = score_limits(events - correction, total, z)
+        below = step + z * math.sqrt(low.low * low.to_one_from_low / total)
+    if events < total:
+        high = score_limits(events + correction, total, z)
+        above = step + z * math.sqrt(high.high * high.to_one_from_high / total)
+    return below, above
+
+
+def _score(counts: Counts, level: float, *, finite: bool) -> Interval | Gap:
+    gap = without_people(counts)
+    if gap is not None:
+        return gap
+    reach = target(counts, level, finite=finite)
+    return Interval(low=_lower(counts, reach), high=-_lower(mirrored(counts), reach))
+
+
+def _lower(counts: Counts, reach: float) -> float:
+    """The difference below the estimate at which u sqrt(V) is ``reach``, u being the multiplier of the constraint.
+
+    The difference is D - u V, and u^2 V is known at the limit, so that only u itself must be exact.
+    """
+    if counts.index_events == 0 and counts.reference_non_events == 0:
+        return -1.0
+
+    def curve(u: float) -> tuple[float, float]:
+        square, slope = _statistic(counts, u)
+        root = math.sqrt(square)
+        return root - reach, slope / (2.0 * root) if root > 0.0 else 0.0
+
+    low, high = 0.0, float(counts.total)
+    while curve(high)[0] < 0.0:
+        low, high = high, 2.0 * high
+    u = increasing_root(curve, low, high, _first_guess(counts, reach))
+    return max(_estimate(counts) - reach * reach / u, -1.0)  # only the last bit can lie beyond -1
+
+
+def _first_guess(counts: Counts, reach: float) -> float:
+    """The multiplier if the fitted risks stayed where the estimates are; infinite where both of those are 0 or 1."""
+    index = counts.index_events * counts.index_non_events / counts.index_total**3
+    reference = counts.reference_events * counts.reference_non_events / counts.reference_total**3
+    return reach / math.sqrt(index + reference) if index + reference > 0.0 else math.inf
+
+
+def _statistic(counts: Counts, u: float) -> tuple[float, float]:
+    """u^2 V and its slope."""
+    index, index_slope = _share(counts.index_events, counts.index_non_events, u)
+    reference, reference_slope = _share(counts.reference_non_events, counts.reference_events, u)
+    return index + reference, index_slope + reference_slope
+
+
+def _share(drawn_off: int, drawn_to: int, u: float) -> tuple[float, float]:
+    """u^2 P(1-P)/n and its slope, for a group that the multiplier draws off one outcome and to the other.
+
+    Of the first outcome P = 2x/(n+u+S), of the second 1-P = 2y/(n-u+S), with S^2 = (u+y-x)^2 + 4xy; once u has
+    passed n the latter is (u-n+S)/(2u). dP/du is -P(1-P)/S. With no x, P stays 0; with no y, P stays 1 up to u = n.
+    """
+    people = drawn_off + drawn_to
+    if drawn_off == 0 or (drawn_to == 0 and u <= people):
+        return 0.0, 0.0
+    stiffness = math.hypot(u + (drawn_to - drawn_off), 2.0 * math.sqrt(drawn_off * drawn_to))
+    first = 2.0 * drawn_off / (people + u + stiffness)
+    passed = u - people
+    second = (passed + stiffness) / (2.0 * u) if passed > 0.0 else 2.0 * drawn_to / (stiffness - passed)
+    spread = first * second
+    return u * u * (spread / people), u * spread * (1.0 / people + 1.0 / stiffness)

@@ -1,0 +1,1 @@
+"""The entries of the table of methods, by measure."""

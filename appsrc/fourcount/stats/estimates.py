@@ -1,0 +1,65 @@
+"""The estimates of a table: what is printed before the interval."""
+
+from __future__ import annotations
+
+import math
+
+from fourcount.stats.results import Counts, Gap
+
+
+def without_people(counts: Counts) -> Gap | None:
+    """The gap of a table in which a group is empty; None where both groups have somebody.
+
+    An empty group says nothing about its risk, so no comparison and no interval is given, by any method.
+    """
+    if counts.total == 0:
+        return Gap("empty-table")
+    if counts.index_total == 0:
+        return Gap("empty-index-group")
+    if counts.reference_total == 0:
+        return Gap("empty-reference-group")
+    return None
+
+
+def risk(events: int, total: int) -> float | Gap:
+    """The fraction of a group that had the event."""
+    return events / total if total else Gap("empty-group")
+
+
+def odds(events: int, total: int) -> float | Gap:
+    """Events for each non-event; ``inf`` where everybody had the event."""
+    if total == 0:
+        return Gap("empty-group")
+    return events / (total - events) if events < total else math.inf
+
+
+def risk_difference(counts: Counts) -> float | Gap:
+    """The index group's risk minus the reference group's, rounded once from the exact fraction."""
+    gap = without_people(counts)
+    if gap is not None:
+        return gap
+    across = counts.index_events * counts.reference_total - counts.reference_events * counts.index_total
+    return across / (counts.index_total * counts.reference_total)
+
+
+def risk_ratio(counts: Counts) -> float | Gap:
+    """The index group's risk over the reference group's; ``inf`` where only the reference group has no event."""
+    gap = without_people(counts)
+    if gap is not None:
+        return gap
+    if counts.events == 0:
+        return Gap("no-events")
+    if counts.reference_events == 0:
+        return math.inf
+    return (counts.index_events * counts.reference_total) / (counts.reference_events * counts.index_total)
+
+
+def odds_ratio(counts: Counts) -> float | Gap:
+    """The sample odds ratio ad/bc; ``inf`` where only bc is 0."""
+    gap = without_people(counts)
+    if gap is not None:
+        return gap
+    if counts.events == 0 or counts.non_events == 0:
+        return Gap("one-outcome-only")
+    across = counts.index_non_events * counts.reference_events
+    return (counts.index_events * counts.reference_non_events) / across if across else math.inf

@@ -1,0 +1,65 @@
+"""The table of methods: every interval, every test and every family, with its title, formula, source and function.
+
+A new method is one more entry. Letters: a, b are the index group's events and non-events, c, d the reference
+group's; n1 = a+b, n2 = c+d, m = a+c, N = n1+n2; p1 = a/n1, p2 = c/n2; for one risk x of n people, p = x/n; z is the
+normal quantile of the confidence level (1.96 at 95%), alpha what the level leaves to 1. Importing this file loads
+neither numpy nor scipy; the entries that need them import them when they are first called.
+"""
+
+from __future__ import annotations
+
+from fourcount.stats.entries.association_tests import ASSOCIATION_TESTS
+from fourcount.stats.entries.comparisons import DIFFERENCE_METHODS, RATIO_METHODS
+from fourcount.stats.entries.entry import Family, Measure, Method, Test
+from fourcount.stats.entries.odds_ratios import ODDS_RATIO_METHODS
+from fourcount.stats.entries.risks import RISK_METHODS
+from fourcount.stats.results import Counts
+
+__all__ = ["FAMILIES", "METHODS", "TESTS", "Family", "Measure", "Method", "Test", "method", "slow", "test"]
+
+METHODS: tuple[Method, ...] = RISK_METHODS + DIFFERENCE_METHODS + RATIO_METHODS + ODDS_RATIO_METHODS
+"""Every interval method, in the order in which a measure's methods are listed."""
+
+TESTS: tuple[Test, ...] = ASSOCIATION_TESTS
+
+FAMILIES: dict[str, Family] = {
+    "score": Family(
+        risk="wilson",
+        risk_difference="miettinen-nurminen",
+        risk_ratio="miettinen-nurminen",
+        odds_ratio="miettinen-nurminen",
+        test="n-minus-1",
+    ),
+    "textbook": Family(risk="wald", risk_difference="wald", risk_ratio="katz", odds_ratio="woolf", test="pearson"),
+    "exact": Family(
+        risk="clopper-pearson",
+        risk_difference="miettinen-nurminen",
+        risk_ratio="miettinen-nurminen",
+        odds_ratio="conditional-exact",
+        test="fisher",
+    ),
+}
+
+_METHOD_BY_KEY: dict[tuple[str, str], Method] = {(entry.measure, entry.key): entry for entry in METHODS}
+_TEST_BY_KEY = {entry.key: entry for entry in TESTS}
+
+_SLOW_FROM = 10_000_000  # the largest count at which the conditional odds ratio still keeps within one frame
+
+
+def method(measure: str, key: str) -> Method:
+    """The entry of one measure's method."""
+    return _METHOD_BY_KEY[measure, key]
+
+
+def test(key: str) -> Test:
+    """The entry of one test."""
+    return _TEST_BY_KEY[key]
+
+
+test.__test__ = False  # type: ignore[attr-defined]  # pytest would collect a function of this name
+
+
+def slow(counts: Counts, family: str) -> bool:
+    """Whether a figure of this family may take longer than one frame of the screen."""
+    largest = max(counts.index_events, counts.index_non_events, counts.reference_events, counts.reference_non_events)
+    return family == "exact" and largest > _SLOW_FROM
