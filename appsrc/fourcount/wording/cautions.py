@@ -96,8 +96,8 @@ TEXTS = {
     "leans": (
         "No effect is inside the range",
         (
-            "The range at this starting risk includes no effect, and reaches further towards {side}, away from the "
-            "estimate."
+            "The range at this starting risk includes no effect, and reaches further on the side of “{side}”, "
+            "away from the estimate."
         ),
     ),
 }

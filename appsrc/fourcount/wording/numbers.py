@@ -10,6 +10,7 @@ from __future__ import annotations
 import math
 
 INFINITY = "∞"
+MINUS = "−"
 TO = " to "
 
 PERCENT_DECIMALS = 1
@@ -28,7 +29,7 @@ def whole(n: int) -> str:
 
 
 def fixed(x: float, decimals: int) -> str:
-    """Half-up to so many decimals; negative decimals round to tens and hundreds. Never ``-0.0``."""
+    """Half-up to so many decimals; negative decimals round to tens and hundreds. Never minus zero."""
     return _written(_scaled(x, decimals), decimals, negative=x < 0)
 
 
@@ -60,6 +61,8 @@ def percent_given(fraction: float) -> str:
 
 def percent_whole(fraction: float) -> str:
     """A whole percentage for patients and for relative effects, with more digits only where it would say 0% or 100%."""
+    if 0 < fraction < SMALLEST_PERCENT:
+        return percent_limit(fraction, fraction)
     decimals = _percent_decimals(fraction, at_least=0, figures=1)
     return f"{fixed_percent(fraction, decimals)}%"
 
@@ -83,6 +86,15 @@ def hundred_limit(difference: float, estimate: float) -> str:
     return fixed_percent(size, decimals)
 
 
+def thousand(difference: float) -> str:
+    """The size of a difference per 1,000 people: whole, with more digits where that would print 0."""
+    size = abs(difference)
+    if 0 < size < SMALLEST_PERCENT:
+        return f"<{_written(1, 3, negative=False)}"
+    decimals = 0 if _scaled(size, 3) or not size else _significant_decimals(size, SMALL_FIGURES) - 3
+    return _written(_scaled(size, decimals + 3), decimals, negative=False)
+
+
 def ratio(x: float) -> str:
     """A ratio: two decimals from 0.10 to 9.99, otherwise three significant digits; 1.00 only where it is 1."""
     return ratio_limit(x, x)
@@ -92,8 +104,8 @@ def ratio_limit(x: float, estimate: float) -> str:
     """A limit of a ratio, with the decimals of its estimate, and more where that would reach 1 or 0."""
     if x == math.inf:
         return INFINITY
-    if x == 0:
-        return "0"
+    if x <= 0:
+        return f"{MINUS}{ratio_limit(-x, estimate)}" if x else "0"
     if x < SMALLEST_RATIO:
         return f"<{fixed(SMALLEST_RATIO, 6)}"
     if x == estimate:
@@ -137,11 +149,11 @@ def level(fraction: float) -> str:
 def plain(x: float, decimals: int = 4) -> str:
     """A quantity inside a formula, with a true minus sign; more decimals where it would print as 0."""
     if math.isinf(x):
-        return INFINITY if x > 0 else f"−{INFINITY}"
+        return INFINITY if x > 0 else f"{MINUS}{INFINITY}"
     size = abs(x)
     if size and _scaled(size, decimals) == 0:
         decimals = _significant_decimals(size, SMALL_FIGURES)
-    return f"{'−' if x < 0 else ''}{fixed(size, decimals)}" if size else "0"
+    return f"{MINUS if x < 0 else ''}{fixed(size, decimals)}" if size else "0"
 
 
 def _scaled(x: float, places: int) -> int:
@@ -157,7 +169,7 @@ def _scaled(x: float, places: int) -> int:
 
 def _written(scaled: int, decimals: int, *, negative: bool) -> str:
     """A whole number of 10^-decimals with its point, its thousands and its sign."""
-    sign = "-" if negative and scaled else ""
+    sign = MINUS if negative and scaled else ""
     if decimals <= 0:
         return f"{sign}{scaled * 10**-decimals:,}"
     before, after = divmod(scaled, 10**decimals)

@@ -1,0 +1,61 @@
+"""How many people of a round number the headline speaks of, and what its numbers are.
+
+Whole people of 100, unless that would make different risks look alike, somebody nobody, nearly all
+all, or numbers that do not add up; then of 1,000, 10,000 and on. The difference is rounded from the
+difference itself, never taken from the rounded parts.
+"""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+
+from fourcount.appraisal.findings import Gap, Interval, Range
+from fourcount.wording import numbers
+
+DENOMINATORS = tuple(10**power for power in range(2, 10))
+FINEST_FOR_LIMITS = 10_000  # for an interval's sake alone the sentence does not leave numbers one can picture
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class People:
+    """Whole people of ``denominator``; the difference and its limits are sizes, ``low`` the smaller one."""
+
+    denominator: int
+    reference: int
+    index: int
+    difference: int
+
+
+def choose(reference: float, index: float, difference: float, interval: Interval | Range | Gap) -> People:
+    """The smallest denominator at which the sentence says nothing that is not so."""
+    fitting = [d for d in DENOMINATORS if _true_at(d, reference, index, difference)] or [DENOMINATORS[-1]]
+    fine = [d for d in fitting if d <= FINEST_FOR_LIMITS and _limits_true_at(d, interval)]
+    denominator = fine[0] if fine else fitting[0]
+    return People(
+        denominator=denominator,
+        reference=numbers.people(reference, denominator),
+        index=numbers.people(index, denominator),
+        difference=numbers.people(difference, denominator),
+    )
+
+
+def _true_at(denominator: int, reference: float, index: float, difference: float) -> bool:
+    """Whether the rounded numbers differ, add up, and call nobody or everybody only who is."""
+    first, second = numbers.people(reference, denominator), numbers.people(index, denominator)
+    apart = numbers.people(difference, denominator)
+    return (
+        abs(first - second) == apart
+        and (apart > 0) == (difference != 0)
+        and all((n > 0) == (risk > 0) for n, risk in ((first, reference), (second, index)))
+        and all((n < denominator) == (risk < 1) for n, risk in ((first, reference), (second, index)))
+    )
+
+
+def _limits_true_at(denominator: int, interval: Interval | Range | Gap) -> bool:
+    """Whether no limit is rounded to no effect, and the two do not fall together."""
+    if isinstance(interval, Gap):
+        return True
+    ends = [x for x in (interval.low, interval.high) if not isinstance(x, Gap)]
+    rounded = [numbers.people(x, denominator) * (1 if x > 0 else -1) for x in ends]
+    whole = all((n != 0) == (x != 0) for n, x in zip(rounded, ends, strict=True))
+    return whole and (len(set(ends)) < 2 or len(set(rounded)) == 2)

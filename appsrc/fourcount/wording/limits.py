@@ -1,0 +1,124 @@
+"""Intervals as text: both limits in one way of writing, with the words that each side needs."""
+
+from __future__ import annotations
+
+from collections.abc import Callable
+
+from fourcount.appraisal.findings import Gap, Interval, NumberNeeded, NumberNeededLimit, Range
+from fourcount.wording import numbers
+
+AnyInterval = Interval | Range | Gap
+
+NO_LIMIT = "no limit"
+FEWER = "fewer"
+MORE = "more"
+LOWER = "lower"
+HIGHER = "higher"
+
+
+def side(difference: float) -> str:
+    """The word for the side of a difference: fewer or more."""
+    return FEWER if difference < 0 else MORE
+
+
+def percent_interval(interval: AnyInterval, estimate: float | Gap) -> str:
+    """``13.8 to 21.1%``: limits with the decimals of the estimate."""
+    if isinstance(interval, Gap):
+        return ""
+
+    def low(x: float) -> str:
+        return numbers.percent_limit(x, x if isinstance(estimate, Gap) else estimate, sign="")
+
+    def high(x: float) -> str:
+        return numbers.percent_limit(x, x if isinstance(estimate, Gap) else estimate)
+
+    first = low if not isinstance(interval.high, Gap) else high
+    return f"{_limit(interval.low, first)}{numbers.TO}{_limit(interval.high, high)}"
+
+
+def ratio_interval(interval: AnyInterval, estimate: float | Gap) -> str:
+    """``0.37 to 0.78``: limits with the decimals of the estimate, more where they would reach 1."""
+    if isinstance(interval, Gap):
+        return ""
+
+    def write(x: float) -> str:
+        return numbers.ratio_limit(x, x if isinstance(estimate, Gap) else estimate)
+
+    return f"{_limit(interval.low, write)}{numbers.TO}{_limit(interval.high, write)}"
+
+
+def difference_interval(interval: AnyInterval, estimate: float | Gap) -> str:
+    """Per 100: ``3.3 to 12.4`` on the estimate's side, else ``2.1 fewer to 5.0 more``."""
+
+    def write(x: float) -> str:
+        return numbers.hundred_limit(x, x if isinstance(estimate, Gap) else estimate)
+
+    return sided(interval, estimate, write)
+
+
+def sided(interval: AnyInterval, estimate: float | Gap, write: Callable[[float], str]) -> str:
+    """An interval of sizes, smaller first where both are on the estimate's side; else each with its word."""
+    if isinstance(interval, Gap):
+        return ""
+    low, high = interval.low, interval.high
+    ends = [x for x in (low, high) if not isinstance(x, Gap)]
+    if not isinstance(estimate, Gap) and estimate and all(x * estimate >= 0 for x in ends):
+        first, second = (low, high) if estimate > 0 else (high, low)
+        return f"{_limit(first, write)}{numbers.TO}{_limit(second, write)}"
+
+    def with_word(x: float) -> str:
+        return f"{write(x)} {side(x)}" if x else write(x)
+
+    return f"{_limit(low, with_word)}{numbers.TO}{_limit(high, with_word)}"
+
+
+def number_needed_interval(needed: NumberNeeded) -> str:
+    """``9 to 31``, or ``NNTB 12 to ∞ to NNTH 40`` where the difference's interval holds no effect."""
+    low, high = needed.low, needed.high
+    if needed.through_infinity:
+        return numbers.TO.join((_needed(low), numbers.INFINITY, _needed(high)))
+    if needed.kind == low.kind == high.kind:
+        return f"{numbers.number_needed(low.value)}{numbers.TO}{numbers.number_needed(high.value)}"
+    return f"{_needed(low)}{numbers.TO}{_needed(high)}"
+
+
+def relative(ratio: float, link: str = " ") -> str:
+    """A ratio as a relative reduction or increase ("relative reduction 46%"); "" where it is 1 or infinite."""
+    if ratio in (1.0, float("inf")):
+        return ""
+    name = "relative reduction" if ratio < 1 else "relative increase"
+    return f"{name}{link}{numbers.percent_whole(abs(1 - ratio))}"
+
+
+def relative_interval(interval: AnyInterval, ratio: float) -> str:
+    """``22% to 63%`` where both limits are on the ratio's side, else ``5% lower to 10% higher``."""
+    if isinstance(interval, Gap):
+        return ""
+    low, high = interval.low, interval.high
+    ends = [x - 1 for x in (low, high) if not isinstance(x, Gap)]
+    if ratio != 1 and all(x * (ratio - 1) >= 0 for x in ends):
+        first, second = (low, high) if ratio > 1 else (high, low)
+        return f"{_limit(first, _part)}{numbers.TO}{_limit(second, _part)}"
+
+    def with_word(x: float) -> str:
+        return f"{_part(x)} {LOWER if x < 1 else HIGHER}" if x != 1 else _part(x)
+
+    return f"{_limit(low, with_word)}{numbers.TO}{_limit(high, with_word)}"
+
+
+def bracketed(text: str) -> str:
+    """An interval behind its estimate, in brackets, if there is one."""
+    return f" ({text})" if text else ""
+
+
+def _part(ratio: float) -> str:
+    return numbers.INFINITY if ratio == float("inf") else numbers.percent_whole(abs(1 - ratio))
+
+
+def _limit(limit: float | Gap, write: Callable[[float], str]) -> str:
+    return NO_LIMIT if isinstance(limit, Gap) else write(limit)
+
+
+def _needed(limit: NumberNeededLimit) -> str:
+    value = numbers.number_needed(limit.value)
+    return value if limit.kind == "neither" else f"{limit.kind} {value}"

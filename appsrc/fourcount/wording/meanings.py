@@ -1,0 +1,192 @@
+"""What each measure means in the reader's own words, and what it is not."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.wording import limits, lines, names, numbers
+from fourcount.wording.gaps import gap_text
+
+COMPATIBLE_KINDS = "compatible with one fewer and with one more"
+
+
+def with_interval(key: str, figure: Figure, choices: Choices) -> str:
+    """A figure's interval behind its estimate: " (95% interval 3.3 to 12.4)", or "" where there is none."""
+    if isinstance(figure.interval, Gap):
+        return ""
+    return f" ({numbers.level(choices.level)} interval {lines.interval_text(key, figure)})"
+
+
+def difference(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
+    """Per 100 and per 1,000; percentage points, not a relative reduction."""
+    estimate, words = _estimate(figure), names.event_words(outcome)
+    groups = f"{names.in_group(outcome, 'index')} than {names.in_group(outcome, 'reference')}"
+    if estimate == 0:
+        same = f"{names.in_group(outcome, 'index')} as {names.in_group(outcome, 'reference')}"
+        said = f"Per 100 people as many {_spanned(words, outcome)} {same}"
+        return f"{said}{with_interval('risk_difference', figure, choices)}.{_no_interval(figure)}"
+    said = f"Per 100 people {lines.estimate_text('risk_difference', figure)} {_spanned(words, outcome)} {groups}"
+    return (
+        f"{said}{with_interval('risk_difference', figure, choices)}; per 1,000 that is {numbers.thousand(estimate)} "
+        f"{limits.side(estimate)}. These are percentage points, not a percentage of the {names.risk_name(outcome)}."
+        f"{_no_interval(figure)}"
+    )
+
+
+def number_needed(outcome: Outcome, needed: NumberNeeded, findings: OutcomeFindings, choices: Choices) -> str:
+    """The number with its comparison, its time, the risk it starts from, and what it does not say."""
+    groups = f"{names.in_group(outcome, 'index')} rather than {names.in_group(outcome, 'reference')}"
+    span = names.over_span(outcome) or f"({lines.NO_SPAN})"
+    interval = f"{numbers.level(choices.level)} interval {limits.number_needed_interval(needed)}"
+    if needed.kind == "neither" or isinstance(findings.counts, Gap):
+        return (
+            "Both groups had the event equally often, so no number of people makes a difference of one "
+            f"({interval}). An interval through infinity is {COMPATIBLE_KINDS}."
+        )
+    figure = findings.measures["risk_difference"]
+    change = _one(_estimate(figure) if isinstance(figure, Figure) else 0.0)
+    people = lines.whole_needed(findings.counts)
+    through = f" The interval runs through infinity: {COMPATIBLE_KINDS}." if needed.through_infinity else ""
+    return (
+        f"{needed.kind} {people}: for every {people} people {groups} {span}, {change} {names.event_words(outcome)}, "
+        f"on average, from {_reference_risk(outcome, findings)} ({interval}).{through} "
+        "It does not say who it is, nor that the others gain or lose nothing."
+    )
+
+
+def risk_reference(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    """The reference group's risk from its counts."""
+    return _risk("reference", outcome, figure, findings, choices)
+
+
+def risk_index(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    """The index group's risk from its counts."""
+    return _risk("index", outcome, figure, findings, choices)
+
+
+def risk_ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    """How many times one risk the other is, and between which two risks."""
+    estimate = _estimate(figure)
+    relative = limits.relative(estimate, " of ")
+    said = f"{_times(names.risk_name(outcome), outcome, numbers.ratio(estimate))}"
+    return (
+        f"{said}{with_interval('risk_ratio', figure, choices)}{f': a {relative}' if relative else ''}. "
+        f"By itself it does not say how large the {names.risk_name(outcome)} is: {_two_risks(outcome, findings)}."
+        f"{_no_interval(figure)}"
+    )
+
+
+def other_risk_ratio(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
+    """The ratio with the other outcome counted; it is not the first one turned over."""
+    said = _times(f"{names.risk_name(outcome)} of the other outcome", outcome, numbers.ratio(_estimate(figure)))
+    return (
+        f"{said}{with_interval('risk_ratio', figure, choices)}. It is not one divided by the first ratio."
+        f"{_no_interval(figure)}"
+    )
+
+
+def odds_ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    """In odds only; then what it is as a risk ratio at a named starting risk."""
+    conversion = findings.conversion
+    claim = odds_ratio_claim(outcome, figure, choices)
+    if isinstance(conversion, Gap) or isinstance(conversion.risk_ratio.estimate, Gap):
+        return f"{claim}; odds are events per non-event, not shares of all people.{_no_interval(figure)}"
+    converted = conversion.risk_ratio
+    baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
+    interval = limits.bracketed(limits.ratio_interval(converted.interval, converted.estimate))
+    ratio = numbers.ratio(conversion.risk_ratio.estimate)
+    return (
+        f"{claim}; odds are not risks: at {baseline} this is a risk ratio of {ratio}{interval}.{_no_interval(figure)}"
+    )
+
+
+def odds_ratio_claim(outcome: Outcome, figure: Figure, choices: Choices) -> str:
+    """The odds ratio in a sentence that speaks of odds and of nothing else, without its full stop."""
+    event = _spanned(names.event_words(outcome), outcome)
+    return (
+        f"The odds that a person {names.in_group(outcome, 'index')} {event} were "
+        f"{numbers.ratio(_estimate(figure))} times those {names.in_group(outcome, 'reference')}"
+        f"{with_interval('odds_ratio', figure, choices)}"
+    )
+
+
+def odds_reference(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    """The reference group's odds from its counts."""
+    return _odds("reference", outcome, figure, findings, choices)
+
+
+def odds_index(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    """The index group's odds from its counts."""
+    return _odds("index", outcome, figure, findings, choices)
+
+
+def _risk(group: names.Group, outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    events, total = _group_counts(group, findings)
+    people = f"{numbers.whole(events)} of {numbers.whole(total)} people {names.in_group(outcome, group)}"
+    return (
+        f"{people} {_spanned(names.event_words(outcome), outcome)}: {numbers.percent(_estimate(figure))}"
+        f"{with_interval(f'risk_{group}', figure, choices)}. "
+        f"It is an average of these people, not one person’s own {names.risk_name(outcome)}.{_no_interval(figure)}"
+    )
+
+
+def _odds(group: names.Group, outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    events, total = _group_counts(group, findings)
+    return (
+        f"{names.sentence_case(names.in_group(outcome, group))}: {numbers.whole(events)} with the event to "
+        f"{numbers.whole(total - events)} without it, odds of {numbers.ratio(_estimate(figure))}"
+        f"{with_interval(f'odds_{group}', figure, choices)}. "
+        f"Odds are events per non-event, not a share of all people.{_no_interval(figure)}"
+    )
+
+
+def _group_counts(group: names.Group, findings: OutcomeFindings) -> tuple[int, int]:
+    counts = findings.counts
+    if isinstance(counts, Gap):
+        return 0, 0
+    if group == "index":
+        return counts.index_events, counts.index_total
+    return counts.reference_events, counts.reference_total
+
+
+def _times(name: str, outcome: Outcome, ratio: str) -> str:
+    index, reference = names.in_group(outcome, "index"), names.in_group(outcome, "reference")
+    return f"The {name} {index} was {ratio} times that {reference}"
+
+
+def _two_risks(outcome: Outcome, findings: OutcomeFindings) -> str:
+    parts = []
+    for group in ("reference", "index"):
+        figure = findings.measures[f"risk_{group}"]
+        if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
+            where = names.in_group(outcome, "reference" if group == "reference" else "index")
+            parts.append(f"{numbers.percent(figure.estimate)} {where}")
+    return "it was " + " and ".join(parts)
+
+
+def _reference_risk(outcome: Outcome, findings: OutcomeFindings) -> str:
+    figure = findings.measures["risk_reference"]
+    if not isinstance(figure, Figure) or isinstance(figure.estimate, Gap):
+        return "the study’s own risk"
+    return f"a risk of {numbers.percent(figure.estimate)} {names.in_group(outcome, 'reference')}"
+
+
+def _one(change: float) -> str:
+    return f"one {limits.side(change)}"
+
+
+def _spanned(words: str, outcome: Outcome) -> str:
+    span = names.within_span(outcome)
+    return f"{words} {span}" if span else words
+
+
+def _estimate(figure: Figure) -> float:
+    """The estimate of a figure that is known to have one."""
+    if isinstance(figure.estimate, Gap):
+        raise TypeError(figure.estimate.key)
+    return figure.estimate
+
+
+def _no_interval(figure: Figure) -> str:
+    return f" {gap_text(figure.interval)}" if isinstance(figure.interval, Gap) else ""

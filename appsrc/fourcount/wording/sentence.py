@@ -1,0 +1,121 @@
+"""The sentences of "What it says": the headline, one for every measure, one for the p value."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, OutcomeFindings, Range
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.stats.methods import test
+from fourcount.wording import limits, meanings, names, numbers
+from fourcount.wording.gaps import gap_text
+from fourcount.wording.headline import People, choose
+
+COMPATIBLE = "compatible with fewer and with more"
+UNDER_ONE = "under 1"
+MEANINGS = {
+    "risk_difference": meanings.difference,
+    "risk_reference": meanings.risk_reference,
+    "risk_index": meanings.risk_index,
+    "risk_ratio": meanings.risk_ratio,
+    "other_risk_ratio": meanings.other_risk_ratio,
+    "odds_ratio": meanings.odds_ratio,
+    "odds_reference": meanings.odds_reference,
+    "odds_index": meanings.odds_index,
+}
+
+
+def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """What the table says, in whole people: the one sentence above all lines."""
+    if isinstance(findings.counts, Gap):
+        return gap_text(findings.counts)
+    if outcome.design == "case-control":
+        return _odds_headline(outcome, findings, choices)
+    figures = [findings.measures[key] for key in ("risk_reference", "risk_index", "risk_difference")]
+    for figure in figures:
+        if isinstance(figure, Gap):
+            return gap_text(figure)
+    reference, index, difference = (figure for figure in figures if isinstance(figure, Figure))
+    for figure in (reference, index, difference):
+        if isinstance(figure.estimate, Gap):
+            return gap_text(figure.estimate)
+    return _people_headline(outcome, reference, index, difference)
+
+
+def measure_sentence(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """What one measure means in this table, and what it is not; or why it is not given."""
+    measure = findings.measures[key]
+    if isinstance(findings.counts, Gap):
+        return gap_text(findings.counts)
+    if isinstance(measure, Gap):
+        return gap_text(measure)
+    if isinstance(measure, NumberNeeded):
+        return meanings.number_needed(outcome, measure, findings, choices)
+    if isinstance(measure.estimate, Gap):
+        interval = meanings.with_interval(key, measure, choices)
+        return f"{gap_text(measure.estimate)}{'' if isinstance(measure.interval, Gap) else f' Its{interval}.'}"
+    return MEANINGS[key](outcome, measure, findings, choices)
+
+
+def p_sentence(findings: OutcomeFindings) -> str:
+    """The p of the family's own test with the test's name, and what it does not say."""
+    probability = findings.test
+    if isinstance(probability, Gap):
+        return gap_text(probability)
+    if isinstance(probability.p, Gap):
+        return f"The p value is not given. {gap_text(probability.p)}"
+    return (
+        f"{numbers.p_phrase(probability.p)} by the {test(probability.method).title} test of no association, two-sided. "
+        "It does not say how large the effect is; the intervals do."
+    )
+
+
+def _odds_headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    figure = findings.measures["odds_ratio"]
+    if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
+        return f"{meanings.odds_ratio_claim(outcome, figure, choices)}."
+    return measure_sentence("odds_ratio", outcome, findings, choices)
+
+
+def _people_headline(outcome: Outcome, reference: Figure, index: Figure, difference: Figure) -> str:
+    estimates = [figure.estimate for figure in (reference, index, difference)]
+    risk_reference, risk_index, gap = (x for x in estimates if not isinstance(x, Gap))
+    people = choose(risk_reference, risk_index, gap, difference.interval)
+    of = f"Of {numbers.whole(people.denominator)} people {names.in_group(outcome, 'reference')}"
+    first = f"{of} {_about(people.reference, people)} {names.event_words(outcome)}"
+    span = names.within_span(outcome)
+    second = (
+        f"of {numbers.whole(people.denominator)} {names.in_group(outcome, 'index')} "
+        f"{'also ' if gap == 0 else ''}{_about(people.index, people)}"
+    )
+    return f"{first}{f' {span}' if span else ''}; {second}. {_difference(gap, people, difference.interval)}"
+
+
+def _about(n: int, people: People) -> str:
+    if n in (0, people.denominator):
+        return "none" if n == 0 else "all"
+    return f"about {numbers.whole(n)}"
+
+
+def _difference(difference: float, people: People, interval: Interval | Range | Gap) -> str:
+    """The difference and its interval in the same whole people."""
+    said = f"That is {numbers.whole(people.difference)} {limits.side(difference)}"
+    if isinstance(interval, Gap):
+        return f"{said if difference else 'There is no interval'}. {gap_text(interval)}"
+    low, high = interval.low, interval.high
+    if isinstance(low, Gap) or isinstance(high, Gap):
+        return f"{said}."
+    if low * difference > 0 and high * difference > 0:
+        few, many = sorted((abs(low), abs(high)))
+        return f"{said}, and could be as few as {_size(few, people)} or as many as {_size(many, people)}."
+    start = f"{said}, and could be" if difference else "The difference could be"
+    both = f": {COMPATIBLE}" if low < 0 < high else ""
+    return f"{start} anything from {_sided(low, people)} to {_sided(high, people)}{both}."
+
+
+def _size(limit: float, people: People) -> str:
+    n = numbers.people(limit, people.denominator)
+    return UNDER_ONE if n == 0 and limit else numbers.whole(n)
+
+
+def _sided(limit: float, people: People) -> str:
+    return f"{_size(limit, people)} {limits.side(limit)}" if limit else "none"
