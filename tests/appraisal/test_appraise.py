@@ -26,7 +26,7 @@ def test_equal_outcomes_have_one_answer(study):
 
 def test_memory_is_bounded():
     """The memory of answers has an end."""
-    assert module.REMEMBERED == module._appraise.cache_info().maxsize
+    assert module._appraise.cache_info().maxsize == module.REMEMBERED
 
 
 @pytest.mark.parametrize("family", ["score", "textbook"])
@@ -119,5 +119,5 @@ assert not heavy, heavy
 def test_score_and_textbook_load_no_library():
     """A fresh interpreter appraises by closed forms, and defers the exact family, without numpy, scipy or Qt."""
     done = subprocess.run([sys.executable, "-c", LIGHT], capture_output=True, text=True, check=False)
-    assert "" == done.stderr
-    assert 0 == done.returncode
+    assert done.stderr == ""
+    assert done.returncode == 0

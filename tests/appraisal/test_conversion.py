@@ -25,7 +25,7 @@ def test_the_formula_of_zhang_and_yu(odds_ratio, baseline, expected):
     assert math.isclose(expected, converted.estimate, rel_tol=1e-14)
     assert math.isclose(expected, converted.interval.low, rel_tol=1e-14)
     assert math.isclose(expected, converted.interval.high, rel_tol=1e-14)
-    assert "miettinen-nurminen" == converted.method
+    assert converted.method == "miettinen-nurminen"
 
 
 @pytest.mark.parametrize(
@@ -44,7 +44,7 @@ def test_an_infinite_odds_ratio_at_a_risk_of_0_is_infinite():
 def test_an_odds_ratio_of_0_says_nothing_where_everybody_has_the_event():
     """At 100% an odds ratio of 0 is undetermined, and a limit of 0 is withheld by itself."""
     converted = converted_figure(figure(0.5, 0.0, 3.0), 1.0)
-    assert 1.0 == converted.estimate
+    assert converted.estimate == 1.0
     assert Range(low=Gap("undetermined-at-baseline"), high=1.0) == converted.interval
 
 
@@ -55,7 +55,7 @@ def test_at_the_reference_risk_the_conversion_gives_the_risk_ratio(appraised, ri
     """The crude odds ratio at the table's own reference risk is the table's risk ratio."""
     findings = appraised(risk, 1000 - risk, 906, 94)
     conversion = findings.conversion
-    assert "reference" == conversion.baseline_from
+    assert conversion.baseline_from == "reference"
     assert odds_ratio == round(findings.measures["odds_ratio"].estimate, 1)
     assert risk_ratio == round(conversion.risk_ratio.estimate, 2)
     assert math.isclose(findings.measures["risk_ratio"].estimate, conversion.risk_ratio.estimate, rel_tol=1e-12)
@@ -64,10 +64,10 @@ def test_at_the_reference_risk_the_conversion_gives_the_risk_ratio(appraised, ri
 def test_a_typed_starting_risk_is_used(appraised):
     """A typed risk takes the place of the reference group's: the odds ratio 0.492 is 0.524 at 12% (by hand)."""
     conversion = appraised(38, 374, 70, 339, baseline="12%").conversion
-    assert (0.12, "given") == (conversion.baseline, conversion.baseline_from)
+    assert (conversion.baseline, conversion.baseline_from) == (0.12, "given")
     odds_ratio = 38 * 339 / (374 * 70)
     assert math.isclose(odds_ratio / (0.88 + 0.12 * odds_ratio), conversion.risk_ratio.estimate, rel_tol=1e-12)
-    assert 0.524 == round(conversion.risk_ratio.estimate, 3)
+    assert round(conversion.risk_ratio.estimate, 3) == 0.524
 
 
 def test_an_empty_reference_group_has_no_risk_to_convert_at(appraised):
@@ -82,7 +82,7 @@ def test_a_gap_goes_through_and_a_correction_is_kept():
     empty = Figure(estimate=Gap("no-events"), interval=Gap("zero-width"), method="katz")
     assert empty == mapped(empty, lambda value: value)
     adjusted = Figure(estimate=1.0, interval=Interval(low=0.5, high=2.0, adjusted="half"), method="woolf")
-    assert "half" == mapped(adjusted, lambda value: value).interval.adjusted
+    assert mapped(adjusted, lambda value: value).interval.adjusted == "half"
 
 
 def test_an_interval_without_both_limits_is_a_gap():

@@ -17,7 +17,7 @@ MEASURES = ["risk_index", "risk_reference", "risk_difference", "risk_ratio", "od
 def test_every_measure_has_every_method_in_every_design(design):
     """No method is ever missing: a withheld one is a gap in its place."""
     every = every_method(COUNTS, design, 0.95)
-    assert MEASURES == list(every)
+    assert list(every) == MEASURES
     for measure, intervals in every.items():
         kind = "risk" if measure.startswith("risk_") and measure[5:] in ("index", "reference") else measure
         assert [method.key for method in METHODS if method.measure == kind] == list(intervals)

@@ -26,7 +26,7 @@ def test_every_design_has_a_row():
 def test_trials_and_cohorts_give_everything(appraised, design):
     """Nothing is withheld from a trial or a cohort, and the measures stand in their order."""
     findings = appraised(*TABLE, design=design)
-    assert {} == withheld(findings)
+    assert withheld(findings) == {}
     assert list(MEASURES) == list(findings.measures)
     assert isinstance(findings.measures["number_needed"], NumberNeeded)
     assert all(isinstance(findings.measures[key], Figure) for key in MEASURES if key != "number_needed")
@@ -35,7 +35,7 @@ def test_trials_and_cohorts_give_everything(appraised, design):
 def test_a_survey_has_no_number_needed(appraised):
     """A cross-sectional survey gives everything but the number needed, in the study and for a patient."""
     findings = appraised(*TABLE, design="survey")
-    assert {"number_needed": "design-survey-nnt"} == withheld(findings)
+    assert withheld(findings) == {"number_needed": "design-survey-nnt"}
     assert Gap("design-survey-nnt") == findings.patient.number_needed
 
 
@@ -66,8 +66,8 @@ def test_a_case_control_study_carries_its_odds_ratio(appraised, effect):
     findings = appraised(*TABLE, design="case-control", baseline="12%", effect=effect)
     patient = findings.patient
     assert isinstance(patient, PatientFindings)
-    assert "odds_ratio" == patient.effect
-    assert "given" == patient.baseline_from
+    assert patient.effect == "odds_ratio"
+    assert patient.baseline_from == "given"
     assert findings.conversion.risk_ratio == patient.risk_ratio
     assert isinstance(patient.number_needed, NumberNeeded)
     assert dict.fromkeys(NO_RISKS, "design-case-control") == withheld(findings)

@@ -34,15 +34,13 @@ def test_worked_examples_of_the_cochrane_handbook(effect, value, fewer_per_1000,
 
 
 # Cook and Sackett 1995 (BMJ 310:452), Table I, from memory: a risk ratio of 0.60 at 20% and at 1.5%.
-@pytest.mark.parametrize(
-    ("baseline", "difference", "number_needed"), [(0.2, -0.08, 13), (0.015, -0.006, 167)]
-)
+@pytest.mark.parametrize(("baseline", "difference", "number_needed"), [(0.2, -0.08, 13), (0.015, -0.006, 167)])
 def test_one_relative_effect_at_two_starting_risks(baseline, difference, number_needed):
     """The same risk ratio means a larger difference at the larger starting risk."""
     patient = at(baseline, "risk_ratio", 0.6, 0.5, 0.7)
     assert math.isclose(difference, patient.difference.estimate, rel_tol=1e-12)
     assert number_needed == math.ceil(patient.number_needed.estimate * (1 - 1e-9))
-    assert "NNTB" == patient.number_needed.kind
+    assert patient.number_needed.kind == "NNTB"
 
 
 # Altman 1998 (BMJ 317:1309): a reduction of 10 points (-5 to 25) is NNTB 10, from NNTB 4 through infinity to NNTH 20.
@@ -50,18 +48,18 @@ def test_a_number_needed_that_goes_through_infinity():
     """Limits on both sides of no effect have their own kinds."""
     needed = at(0.5, "risk_ratio", 0.8, 0.5, 1.1).number_needed
     assert needed.through_infinity
-    assert ("NNTB", 10) == (needed.kind, round(needed.estimate, 9))
-    assert ("NNTB", 4) == (needed.low.kind, round(needed.low.value, 9))
-    assert ("NNTH", 20) == (needed.high.kind, round(needed.high.value, 9))
+    assert (needed.kind, round(needed.estimate, 9)) == ("NNTB", 10)
+    assert (needed.low.kind, round(needed.low.value, 9)) == ("NNTB", 4)
+    assert (needed.high.kind, round(needed.high.value, 9)) == ("NNTH", 20)
 
 
 def test_the_risk_ratio_kept_constant_at_a_typed_risk(appraised):
     """38/412 v 70/409 carried to 12% by the risk ratio of 0.54 is 6.47% with the treatment (by hand)."""
     patient = appraised(*TABLE, baseline="12%").patient
-    assert 0.54 == round(patient.carried.estimate, 2)
-    assert 0.0647 == round(patient.with_.estimate, 4)
+    assert round(patient.carried.estimate, 2) == 0.54
+    assert round(patient.with_.estimate, 4) == 0.0647
     assert math.isclose(0.12 * (38 / 412) / (70 / 409), patient.with_.estimate, rel_tol=1e-12)
-    assert ("given", "effect", 0.12) == (patient.baseline_from, patient.range_from, patient.baseline)
+    assert (patient.baseline_from, patient.range_from, patient.baseline) == ("given", "effect", 0.12)
     assert patient.carried == patient.risk_ratio
 
 
@@ -104,7 +102,7 @@ def test_the_tables_own_risk_takes_the_tables_intervals(appraised, effect, famil
 def test_the_tables_own_risk_stands_where_no_ratio_has_a_value(appraised):
     """0/20 v 0/30 has no ratio, and both risks and their difference stand."""
     patient = appraised(0, 20, 0, 30).patient
-    assert (0.0, 0.0, 0.0) == (patient.without.estimate, patient.with_.estimate, patient.difference.estimate)
+    assert (patient.without.estimate, patient.with_.estimate, patient.difference.estimate) == (0.0, 0.0, 0.0)
     assert Gap("no-events") == patient.risk_ratio.estimate
 
 
@@ -125,20 +123,20 @@ def test_a_limit_that_passes_100_percent_is_withheld_alone():
     assert math.isclose(0.9, patient.with_.estimate)
     assert isinstance(patient.with_.interval, Range)
     assert math.isclose(0.72, patient.with_.interval.low)
-    assert "beyond-one" == patient.with_.interval.high.key
+    assert patient.with_.interval.high.key == "beyond-one"
     assert math.isclose(0.12, patient.difference.interval.low)
-    assert "beyond-one" == patient.difference.interval.high.key
+    assert patient.difference.interval.high.key == "beyond-one"
     assert Gap("limit-withheld") == patient.number_needed
 
 
 def test_an_estimate_that_passes_100_percent_is_withheld():
     """At 60% a risk ratio of 2 is no risk; a lower limit of 1.5 still is one."""
     patient = at(0.6, "risk_ratio", 2.0, 1.5, 3.0)
-    assert "beyond-one" == patient.with_.estimate.key
+    assert patient.with_.estimate.key == "beyond-one"
     assert math.isclose(0.9, patient.with_.interval.low)
-    assert "beyond-one" == patient.difference.estimate.key
-    assert "beyond-one" == patient.number_needed.key
-    assert 2.0 == patient.risk_ratio.estimate
+    assert patient.difference.estimate.key == "beyond-one"
+    assert patient.number_needed.key == "beyond-one"
+    assert patient.risk_ratio.estimate == 2.0
 
 
 def test_nothing_is_withheld_at_exactly_100_percent():
@@ -150,27 +148,43 @@ def test_the_odds_scale_never_passes_100_percent():
     """An odds ratio carried to 60% has every limit, an infinite one at 100%."""
     patient = at(0.6, "odds_ratio", 9.0, 2.0, math.inf)
     assert math.isclose(0.75, patient.with_.interval.low)
-    assert 1.0 == patient.with_.interval.high
+    assert patient.with_.interval.high == 1.0
 
 
 @pytest.mark.parametrize(
-    ("baseline", "effect", "value"), [(0.0, "risk_ratio", math.inf), (0.0, "odds_ratio", math.inf), (1.0, "odds_ratio", 0)]
+    ("baseline", "effect", "value", "key"),
+    [
+        (0.0, "risk_ratio", math.inf, "infinite-at-zero"),
+        (0.0, "odds_ratio", math.inf, "infinite-at-zero"),
+        (1.0, "odds_ratio", 0.0, "undetermined-at-baseline"),
+    ],
 )
-def test_an_endless_effect_at_the_end_of_the_scale_is_undetermined(baseline, effect, value):
+def test_an_endless_effect_at_the_end_of_the_scale_is_undetermined(baseline, effect, value, key):
     """0 times infinity is no risk: the figure is withheld and nothing becomes nan."""
-    assert Gap("undetermined-at-baseline") == at(baseline, effect, value, value, value).with_.estimate
+    assert Gap(key) == at(baseline, effect, value, value, value).with_.estimate
+
+
+@pytest.mark.parametrize(
+    ("cells", "limit", "key"), [((1, 9, 5, 5), "low", "beyond-zero"), ((9, 1, 5, 5), "high", "beyond-one")]
+)
+def test_a_limit_of_the_table_that_is_no_risk_is_withheld_from_the_patient(appraised, cells, limit, key):
+    """Wald's limit of 1/10 is below 0 and that of 9/10 above 100%: the study's row shows it, the patient's does not."""
+    findings = appraised(*cells, family="textbook")
+    assert not 0 <= getattr(findings.measures["risk_index"].interval, limit) <= 1
+    assert Gap(key) == getattr(findings.patient.with_.interval, limit)
+    assert findings.measures["risk_difference"] == findings.patient.difference
 
 
 def test_a_welcome_event_turns_the_kind_of_the_number_needed(appraised):
     """Fewer of a welcome event is harm."""
-    assert "NNTB" == appraised(*TABLE, baseline="12%").patient.number_needed.kind
-    assert "NNTH" == appraised(*TABLE, baseline="12%", left_welcome=True).patient.number_needed.kind
+    assert appraised(*TABLE, baseline="12%").patient.number_needed.kind == "NNTB"
+    assert appraised(*TABLE, baseline="12%", left_welcome=True).patient.number_needed.kind == "NNTH"
 
 
 def test_an_interval_that_is_withheld_leaves_the_estimates(appraised):
     """5/5 v 8/8 by the textbook has no interval for the risk ratio of 1, and the risk with still stands at 12%."""
     patient = appraised(5, 0, 8, 0, baseline="12%", family="textbook").patient
-    assert 0.12 == patient.with_.estimate
+    assert patient.with_.estimate == 0.12
     assert Gap("zero-width") == patient.with_.interval == patient.number_needed
 
 

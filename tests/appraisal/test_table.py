@@ -27,9 +27,7 @@ def test_right_column_counted_turns_the_columns(study):
 
 def test_events_of_total_gives_the_same_counts(study):
     """Events and totals give the counts that events and non-events give."""
-    table = EventsOfTotal(
-        first_left_text="38", first_right_text="412", second_left_text="70", second_right_text="409"
-    )
+    table = EventsOfTotal(first_left_text="38", first_right_text="412", second_left_text="70", second_right_text="409")
     assert read(study(38, 374, 70, 339)).counts == read(Outcome(table=table)).counts
 
 
@@ -39,7 +37,7 @@ def test_an_empty_cell_is_not_typed_and_margins_stay_live(appraised):
     assert Gap("not-typed") == findings.counts
     assert dict.fromkeys(MEASURES, Gap("not-typed")) == findings.measures
     assert (Gap("not-typed"),) * 3 == (findings.test, findings.conversion, findings.patient)
-    assert () == findings.cautions
+    assert findings.cautions == ()
     assert Totals(first_left=38, first_right=374, second_left=70, first=412, left=108) == findings.totals
 
 
@@ -47,14 +45,14 @@ def test_an_unreadable_cell_outweighs_an_empty_one(appraised):
     """A cell without a count makes the table unreadable, and its mark names the field."""
     findings = appraised("-3", 374, "", 339)
     assert Gap("unreadable") == findings.counts
-    assert [("first_left_text", False)] == [(mark.field, mark.used) for mark in findings.marks]
+    assert [(mark.field, mark.used) for mark in findings.marks] == [("first_left_text", False)]
 
 
 def test_a_mark_whose_cell_is_used_withholds_nothing(appraised):
     """A printed percentage that disagrees is marked, and the counts are used."""
     findings = appraised("38 (50%)", 374, 70, 339)
     assert isinstance(findings.counts, Counts)
-    assert [True] == [mark.used for mark in findings.marks]
+    assert [mark.used for mark in findings.marks] == [True]
 
 
 def test_margins_of_a_whole_table(appraised):
@@ -69,7 +67,7 @@ def test_margins_of_a_whole_table(appraised):
 def test_an_unreadable_starting_risk_is_marked_in_its_field(appraised):
     """The field of the starting risk has its own mark, and the study's figures stand."""
     findings = appraised(38, 374, 70, 339, baseline="twelve")
-    assert ["starting_risk_text"] == [mark.field for mark in findings.marks]
+    assert [mark.field for mark in findings.marks] == ["starting_risk_text"]
     assert Gap("baseline-unreadable") == findings.patient
     assert Gap("baseline-unreadable") == findings.conversion
     assert not isinstance(findings.measures["risk_ratio"], Gap)
@@ -77,4 +75,4 @@ def test_an_unreadable_starting_risk_is_marked_in_its_field(appraised):
 
 def test_the_mark_of_the_starting_risk_is_there_without_counts(appraised):
     """An unreadable starting risk is marked while the table is still empty."""
-    assert ["starting_risk_text"] == [mark.field for mark in appraised("", "", "", "", baseline="x").marks]
+    assert [mark.field for mark in appraised("", "", "", "", baseline="x").marks] == ["starting_risk_text"]

@@ -1,4 +1,4 @@
-"""The odds ratio as a risk ratio at a starting risk."""
+"""The odds ratio as a risk ratio at a starting risk, and figures through a function."""
 
 from __future__ import annotations
 
@@ -20,7 +20,9 @@ def converted_figure(odds_ratio: Figure, baseline: float) -> Figure:
     """The figure of the risk ratio that an odds ratio means at a starting risk, by the odds ratio's method."""
 
     def converted(value: float) -> float | Gap:
-        return _risk_ratio(value, baseline)
+        if undetermined(value, baseline):
+            return Gap("undetermined-at-baseline")
+        return risk_ratio_from_odds_ratio(value, baseline)
 
     return mapped(odds_ratio, converted)
 
@@ -45,8 +47,6 @@ def _mapped_interval(
     return Interval(low=low, high=high, adjusted=interval.adjusted)
 
 
-def _risk_ratio(odds_ratio: float, baseline: float) -> float | Gap:
-    # Every odds ratio above 0 is a risk ratio of 1 where everybody has the event; 0 itself says nothing there.
-    if odds_ratio == 0 and baseline == 1:
-        return Gap("undetermined-at-baseline")
-    return risk_ratio_from_odds_ratio(odds_ratio, baseline)
+def undetermined(odds_ratio: float, baseline: float) -> bool:
+    """Whether the odds with the treatment would be 0 times infinity: everybody has the event, and the ratio is 0."""
+    return odds_ratio == 0 and baseline == 1

@@ -38,7 +38,7 @@ GAP_KEYS = (
     "no-starting-risk",  # nothing typed, and the reference group has nobody
     "baseline-unreadable",  # the typed starting risk gives no risk
     "carried-gap",  # the effect to carry has no value
-    "undetermined-at-baseline",  # an effect of 0 or infinity says nothing at a starting risk of 0% or 100%
+    "undetermined-at-baseline",  # an odds ratio of 0 says nothing at a starting risk of 100%
     "bare-starting-risk",  # the starting risk is a bare value without an interval of its own
     "limit-withheld",  # one limit of the difference is withheld, so the number needed has no interval
 )
@@ -46,7 +46,7 @@ GAP_KEYS = (
 
 
 class Range(msgspec.Struct, frozen=True, kw_only=True):
-    """An interval of which exactly one limit cannot be given, since a risk would pass 100% there.
+    """An interval of which exactly one limit cannot be given, since no risk lies there.
 
     Only figures under the patient have one; where both limits cannot be given, the interval is a ``Gap``.
     """

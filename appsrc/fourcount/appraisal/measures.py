@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import math
 from collections.abc import Callable, Mapping
 from dataclasses import dataclass
 from types import MappingProxyType
@@ -81,15 +82,21 @@ def _risk(table: Table, events: int, total: int) -> Figure:
 
 def _odds(table: Table, events: int, total: int) -> Figure:
     """Odds with the limits of the risk, each mapped p/(1-p): the map is monotone, so the coverage is the same."""
-    risk = _risk(table, events, total)
-    interval = risk.interval
-    if isinstance(interval, Interval):
-        interval = Interval(low=_as_odds(interval.low), high=_as_odds(interval.high), adjusted=interval.adjusted)
-    return Figure(estimate=estimates.odds(events, total), interval=interval, method=risk.method)
+    key = FAMILIES[table.choices.family].risk
+    interval = _as_odds(_interval(table, "risk", key, events, total))
+    return Figure(estimate=estimates.odds(events, total), interval=interval, method=key)
 
 
-def _as_odds(risk: float) -> float:
-    return risk / (1 - risk) if risk < 1 else float("inf")
+def _as_odds(interval: Interval | Gap) -> Interval | Gap:
+    """The limits of odds; none where the bare textbook formula left 0 to 100%, since no odds lie there."""
+    if isinstance(interval, Gap):
+        return interval
+    if interval.low < 0:
+        return Gap("beyond-zero")
+    if interval.high > 1:
+        return Gap("beyond-one")
+    low, high = (risk / (1 - risk) if risk < 1 else math.inf for risk in (interval.low, interval.high))
+    return Interval(low=low, high=high, adjusted=interval.adjusted)
 
 
 def _interval(table: Table, measure: str, key: str, *arguments: int | Counts) -> Interval | Gap:

@@ -2,9 +2,7 @@
 
 from __future__ import annotations
 
-import math
-
-from fourcount.appraisal.conversion import converted_figure, mapped
+from fourcount.appraisal.conversion import converted_figure, mapped, undetermined
 from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, PatientFindings
 from fourcount.appraisal.gating import Support
 from fourcount.appraisal.measures import Figures, number_needed_from
@@ -37,8 +35,8 @@ def _from_table(
         baseline_from="reference",
         effect=effect,
         carried=figures[effect],
-        without=figures["risk_reference"],
-        with_=figures["risk_index"],
+        without=mapped(figures["risk_reference"], _as_risk),
+        with_=mapped(figures["risk_index"], _as_risk),
         difference=figures["risk_difference"],
         number_needed=_gated(figures["risk_difference"], support, welcome=welcome),
         risk_ratio=figures["risk_ratio"],
@@ -87,9 +85,13 @@ def _gated(difference: Figure, support: Support, *, welcome: bool) -> NumberNeed
 
 
 def _risk_with(effect: Effect, value: float, baseline: float) -> float | Gap:
-    # Where nobody (or, by odds, everybody) has the event anyway, an infinite (or zero) ratio gives no risk.
-    nobody_times_infinity = baseline == 0 and math.isinf(value)
-    everybody_times_zero = effect == "odds_ratio" and baseline == 1 and value == 0
-    if nobody_times_infinity or everybody_times_zero:
+    if effect == "odds_ratio" and undetermined(value, baseline):
         return Gap("undetermined-at-baseline")
     return risk_with(effect, value, baseline)
+
+
+def _as_risk(value: float) -> float | Gap:
+    """A limit of the bare textbook formula can lie outside 0 to 100%: it is no risk of a patient."""
+    if value < 0:
+        return Gap("beyond-zero")
+    return Gap("beyond-one") if value > 1 else value
