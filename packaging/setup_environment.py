@@ -21,8 +21,6 @@ FOLDER = ROOT / ".venv"
 TO_RUN = ROOT / "packaging" / "locked.txt"
 TO_TEST = ROOT / "packaging" / "locked-with-tests.txt"  # holds every line of the other one
 
-Say = Callable[[str], None]
-
 
 def python_of(folder: Path) -> Path:
     """The interpreter of an environment."""
@@ -38,7 +36,7 @@ def is_ready(lock: Path, folder: Path = FOLDER) -> bool:
     return _digest(lock) in stamped and python_of(folder).exists()
 
 
-def make_ready(lock: Path, say: Say, folder: Path = FOLDER) -> None:
+def make_ready(lock: Path, say: Callable[[str], None], folder: Path = FOLDER) -> None:
     """Make the environment, or bring it to the locked versions; what fails leaves nothing half-made."""
     with _removed_on_failure(folder):
         if not _usable(folder):
