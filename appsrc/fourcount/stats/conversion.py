@@ -28,11 +28,11 @@ def risk_ratio_from_odds_ratio(odds_ratio: float, baseline: float) -> float:
 def risk_with(effect: Effect, value: float, baseline: float) -> float | Gap:
     """The risk with the index treatment at a starting risk: P0 RR, or the risk whose odds are OR times those of P0.
 
-    A risk ratio can ask for more than 100%: a gap, never cut to 100%. An infinite effect at a starting risk of 0 is
-    0 times infinity: a gap too. Source: Cochrane Handbook 15.4.4.
+    A risk ratio can ask for more than 100%: a gap, never cut to 100%. 0 times infinity is a gap too: an infinite
+    effect at a starting risk of 0, an odds ratio of 0 at a starting risk of 1. Source: Cochrane Handbook 15.4.4.
     """
-    if baseline == 0.0 and math.isinf(value):
-        return Gap("infinite-at-zero")
+    if (baseline == 0.0 and math.isinf(value)) or (effect == "odds_ratio" and baseline == 1.0 and value == 0.0):
+        return Gap("undetermined-at-baseline")
     if effect == "odds_ratio":
         return _risk_at_odds(value, baseline)
     risk = value * baseline

@@ -60,6 +60,6 @@ def odds_ratio(counts: Counts) -> float | Gap:
     if gap is not None:
         return gap
     if counts.events == 0 or counts.non_events == 0:
-        return Gap("one-outcome-only")
+        return Gap("no-events" if counts.events == 0 else "no-non-events")
     across = counts.index_non_events * counts.reference_events
     return (counts.index_events * counts.reference_non_events) / across if across else math.inf

@@ -13,12 +13,11 @@ GAP_KEYS = (
     "empty-index-group",  # nobody in the index group
     "empty-reference-group",  # nobody in the reference group
     "empty-group",  # nobody in the one group that is asked about
-    "no-events",  # no event in either group: the ratio is 0/0
-    "no-non-events",  # everybody had the event: the odds ratio is not determined
-    "one-outcome-only",  # one column is all zero: the odds ratio is not determined by the table
+    "no-events",  # no event in either group: the ratio and the odds ratio are 0/0
+    "no-non-events",  # everybody had the event: the odds ratio is 0/0
     "zero-width",  # the bare formula would give an interval of zero width
     "beyond-one",  # a risk would pass 100%
-    "infinite-at-zero",  # an infinite effect at a starting risk of 0: 0 times infinity is not determined
+    "undetermined-at-baseline",  # an infinite effect at a starting risk of 0, or an odds ratio of 0 at a risk of 1
     "beyond-zero",  # a risk would fall below 0
 )
 """Every reason for which a function of this folder gives no figure."""
