@@ -112,7 +112,7 @@ def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choice
         detail=_detail(key, findings.counts, choices),
         estimate=estimate_text(key, measure),
         interval=interval_text(key, measure),
-        note=_note(key, measure, findings),
+        note=_note(key, measure, outcome, findings),
         kind=KINDS.get(key, ""),
         group=group,
         low=low,
@@ -173,12 +173,12 @@ def _detail(key: str, counts: Counts, choices: Choices) -> str:
     return f"per 100, {family}" if key == "risk_difference" else family
 
 
-def _note(key: str, figure: Figure, findings: OutcomeFindings) -> str:
+def _note(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings) -> str:
     fragments = [_adjusted(figure)]
     if key == "risk_ratio":
         fragments += [_relative_note(figure), _other_outcome_note(findings.measures["other_risk_ratio"])]
     if key == "odds_ratio":
-        fragments.append(conversion_text(findings.conversion))
+        fragments.append(conversion_text(findings.conversion, names.risk_name(outcome)))
     sentences = [gap_text(part) for part in (figure.estimate, figure.interval) if isinstance(part, Gap)]
     fragment = "; ".join(part for part in fragments if part)
     if fragment and sentences:
@@ -204,14 +204,14 @@ def _other_outcome_note(figure: Figure | NumberNeeded | Gap) -> str:
     return f"ratio of the other outcome {numbers.ratio(figure.estimate)}{limits.bracketed(interval)}"
 
 
-def conversion_text(conversion: Conversion | Gap) -> str:
+def conversion_text(conversion: Conversion | Gap, risk: str) -> str:
     """The odds ratio as a risk ratio at a starting risk: "as a risk ratio at 12%: 0.52 (0.35 to 0.77)"."""
     if isinstance(conversion, Gap) or isinstance(conversion.risk_ratio.estimate, Gap):
         return ""
     figure = conversion.risk_ratio
     interval = limits.ratio_interval(figure.interval, figure.estimate)
     return (
-        f"as a risk ratio at {baseline_text(conversion.baseline, conversion.baseline_from)}: "
+        f"as a {risk} ratio at {baseline_text(conversion.baseline, conversion.baseline_from)}: "
         f"{numbers.ratio(conversion.risk_ratio.estimate)}{limits.bracketed(interval)}"
     )
 

@@ -6,7 +6,7 @@ from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, Ou
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.methods import test
-from fourcount.wording import limits, meanings, names, numbers
+from fourcount.wording import limits, lines, meanings, names, numbers
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import People, choose
 
@@ -51,8 +51,10 @@ def measure_sentence(key: str, outcome: Outcome, findings: OutcomeFindings, choi
     if isinstance(measure, NumberNeeded):
         return meanings.number_needed(outcome, measure, findings, choices)
     if isinstance(measure.estimate, Gap):
-        interval = meanings.with_interval(key, measure, choices)
-        return f"{gap_text(measure.estimate)}{'' if isinstance(measure.interval, Gap) else f' Its{interval}.'}"
+        if isinstance(measure.interval, Gap):
+            return gap_text(measure.estimate)
+        interval = f"{numbers.level(choices.level)} interval is {lines.interval_text(key, measure)}"
+        return f"{gap_text(measure.estimate)} Its {interval}."
     return MEANINGS[key](outcome, measure, findings, choices)
 
 

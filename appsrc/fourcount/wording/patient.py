@@ -1,0 +1,251 @@
+"""The words of "For one patient": whole people, both frames, the absolute before the relative."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+
+from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings, PatientFindings
+from fourcount.record.outcome import Outcome
+from fourcount.wording import limits, names, numbers
+from fourcount.wording.gaps import gap_text
+from fourcount.wording.headline import choose
+
+LONGEST_KEY = 40
+NOT_GIVEN = "not given"
+TOO_SMALL = "too small to draw"
+WHICH_PEOPLE = "We cannot say which people."
+DO_NOT_ADD_UP = "Whole numbers are rounded, so they need not add up."
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class PatientWords:
+    """Every text of the patient's column and picture; "" where there is nothing to say.
+
+    ``missing`` names what the reader has not named yet, without which no patient is shown a picture.
+    ``scale`` says that the picture shows more than 100 people, or that it is too small to draw.
+    """
+
+    without_title: str
+    with_title: str
+    without_count: str = ""
+    without_percent: str = ""
+    with_count: str = ""
+    with_percent: str = ""
+    without_other: str = ""
+    with_other: str = ""
+    key_event: str = ""
+    key_avoided: str = ""
+    key_added: str = ""
+    key_other: str = ""
+    summary_bold: str = ""
+    summary: str = ""
+    detail: str = ""
+    scale: str = ""
+    missing: tuple[str, ...] = ()
+    picture_sentence: str = ""
+
+
+def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int | None) -> PatientWords:
+    """All words at the patient's starting risk; ``denominator`` is the picture's, None where none can be drawn."""
+    patient = findings.patient
+    without_title = f"Without: {names.label_within(outcome, 'reference')}"
+    with_title = f"With: {names.label_within(outcome, 'index')}"
+    if isinstance(patient, Gap):
+        return PatientWords(
+            without_title=without_title, with_title=with_title, detail=gap_text(patient), missing=missing(outcome)
+        )
+    people = denominator or _text_only_denominator(patient)
+    change = patient.difference.estimate
+    return PatientWords(
+        without_title=without_title,
+        with_title=with_title,
+        without_count=_count(patient.without, people),
+        without_percent=_percent(patient.without, people),
+        with_count=_count(patient.with_, people),
+        with_percent=_percent(patient.with_, people),
+        without_other=_others(patient.without, people, outcome),
+        with_other=_others(patient.with_, people, outcome),
+        key_event=names.event_key(outcome),
+        key_avoided=_key("avoided", outcome) if not isinstance(change, Gap) and change < 0 else "",
+        key_added=_key("added", outcome) if not isinstance(change, Gap) and change > 0 else "",
+        key_other=names.other_key(outcome),
+        summary_bold=_change(patient.difference, people),
+        summary=_summary(outcome, patient, people),
+        detail=_detail(patient, people),
+        scale=_scale(denominator),
+        missing=missing(outcome),
+        picture_sentence=_picture_sentence(outcome, patient, people),
+    )
+
+
+def missing(outcome: Outcome) -> tuple[str, ...]:
+    """What has to be named before a patient is shown anything."""
+    wanted = {
+        "the event": outcome.event_words_text.strip() or outcome.event_heading_text.strip(),
+        "the reference group": outcome.reference_label_text.strip(),
+        "the index group": outcome.index_label_text.strip(),
+        "the time span": outcome.span_text.strip(),
+    }
+    return tuple(name for name, text in wanted.items() if not text)
+
+
+def _text_only_denominator(patient: PatientFindings) -> int:
+    """Where nothing can be drawn, the smallest round number of people whose whole numbers say what is so."""
+    parts = (patient.without.estimate, patient.with_.estimate, patient.difference.estimate)
+    without, with_, change = (0.0 if isinstance(part, Gap) else part for part in parts)
+    if any(isinstance(part, Gap) for part in parts):
+        return 100
+    return choose(without, with_, change, Gap("follows")).denominator
+
+
+def _count(figure: Figure, people: int) -> str:
+    """``12 in 100``."""
+    if isinstance(figure.estimate, Gap):
+        return NOT_GIVEN
+    return f"{_whole(figure.estimate, people)} in {numbers.whole(people)}"
+
+
+def _whole(risk: float, people: int) -> str:
+    """Whole people, never nobody for somebody nor everybody for nearly everybody."""
+    n = numbers.people(risk, people)
+    if n == 0 and risk:
+        return "under 1"
+    if n >= people and risk < 1:
+        return f"over {numbers.whole(people - 1)}"
+    return numbers.whole(n)
+
+
+def _percent(figure: Figure, people: int) -> str:
+    """The same share as a percentage with the same digits: 12% of 100, 1.2% of 1,000."""
+    if isinstance(figure.estimate, Gap):
+        return ""
+    risk = figure.estimate
+    n = numbers.people(risk, people)
+    if (n == 0 and risk) or (n >= people and risk < 1):
+        return numbers.percent_whole(risk)
+    return f"{numbers.fixed_percent(risk, len(str(people)) - 3)}%"
+
+
+def _others(figure: Figure, people: int, outcome: Outcome) -> str:
+    """The other frame: ``88 did not fall``. It is what the rounded count leaves, so that the two make the whole."""
+    if isinstance(figure.estimate, Gap):
+        return ""
+    n, risk = numbers.people(figure.estimate, people), figure.estimate
+    if n == 0 and risk:
+        left = f"over {numbers.whole(people - 1)}"
+    elif n >= people and risk < 1:
+        left = "under 1"
+    else:
+        left = numbers.whole(people - n)
+    return f"{left} {names.other_words(outcome)}"
+
+
+def _key(verb: str, outcome: Outcome) -> str:
+    name = names.mid_sentence(outcome.name_text.strip())
+    if outcome.welcome and verb == "avoided":
+        verb = "lost"
+    return f"{name} {verb}, on balance" if name and len(name) <= LONGEST_KEY else f"{verb}, on balance"
+
+
+def _change(difference: Figure, people: int) -> str:
+    """``6 fewer in 100``, from the difference itself."""
+    change = difference.estimate
+    if isinstance(change, Gap):
+        return ""
+    if change == 0:
+        return f"The same in {numbers.whole(people)}"
+    return f"{_size(change, people)} {limits.side(change)} in {numbers.whole(people)}"
+
+
+def _size(change: float, people: int) -> str:
+    n = numbers.people(change, people)
+    return "under 1" if n == 0 and change else numbers.whole(n)
+
+
+def _range(patient: PatientFindings, people: int) -> str:
+    def write(x: float) -> str:
+        return _size(x, people)
+
+    return limits.sided(patient.difference.interval, patient.difference.estimate, write)
+
+
+def _summary(outcome: Outcome, patient: PatientFindings, people: int) -> str:
+    interval = _range(patient, people)
+    parts = (names.over_span(outcome), f"range {interval}" if interval else "")
+    return ", ".join(part for part in parts if part)
+
+
+def _detail(patient: PatientFindings, people: int) -> str:
+    """What stands under the summary: number needed, relative words, and what the range leaves out."""
+    sentences = [_number_needed(patient.number_needed), _relative(patient.risk_ratio)]
+    for figure in (patient.with_, patient.difference):
+        sentences += [gap_text(gap) for gap in _gaps(figure)]
+    if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
+        sentences.append(f"The range leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
+    if not _adds_up(patient, people):
+        sentences.append(DO_NOT_ADD_UP)
+    return " ".join(part for part in dict.fromkeys(sentences) if part)
+
+
+def _number_needed(needed: NumberNeeded | Gap) -> str:
+    if isinstance(needed, Gap):
+        return gap_text(needed)
+    kind = "NNT" if needed.kind == "neither" else needed.kind
+    interval = limits.number_needed_interval(needed)
+    return f"{kind} at this starting risk {numbers.number_needed(needed.estimate)} ({interval})."
+
+
+def _relative(ratio: Figure) -> str:
+    if isinstance(ratio.estimate, Gap):
+        return ""
+    change = ratio.estimate - 1
+    if change in (0.0, float("inf")):
+        return ""
+    word = limits.LOWER if change < 0 else limits.HIGHER
+    interval = limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
+    return f"In relative words {numbers.percent_whole(abs(change))} {word}{interval}."
+
+
+def _gaps(figure: Figure) -> tuple[Gap, ...]:
+    """Whatever a figure withholds: its estimate, its interval or one limit."""
+    interval = figure.interval
+    ends = (interval,) if isinstance(interval, Gap) else (interval.low, interval.high)
+    return tuple(part for part in (figure.estimate, *ends) if isinstance(part, Gap))
+
+
+def _adds_up(patient: PatientFindings, people: int) -> bool:
+    parts = (patient.without.estimate, patient.with_.estimate, patient.difference.estimate)
+    rounded = [0 if isinstance(part, Gap) else numbers.people(part, people) for part in parts]
+    return any(isinstance(part, Gap) for part in parts) or abs(rounded[1] - rounded[0]) == rounded[2]
+
+
+def _scale(denominator: int | None) -> str:
+    if denominator is None:
+        return TOO_SMALL
+    return "" if denominator == 100 else f"Each picture shows {numbers.whole(denominator)} people."
+
+
+def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -> str:
+    """The whole picture in one sentence: both groups, both frames, the change and its range."""
+    all_people, span = numbers.whole(people), names.within_span(outcome)
+    first = (
+        f"Of {all_people} people {names.in_group(outcome, 'reference')} {_affected(patient.without, people)} "
+        f"{names.event_words(outcome)}{f' {span}' if span else ''} and {_others(patient.without, people, outcome)}"
+    )
+    if isinstance(patient.with_.estimate, Gap):
+        return f"{first}. {names.sentence_case(names.in_group(outcome, 'index'))}: {gap_text(patient.with_.estimate)}"
+    second = (
+        f"of {all_people} {names.in_group(outcome, 'index')} {_affected(patient.with_, people)} "
+        f"{names.event_words(outcome)} and {_others(patient.with_, people, outcome)}"
+    )
+    interval = _range(patient, people)
+    change = _change(patient.difference, people)
+    change = change[:1].lower() + change[1:]
+    return f"{first}; {second}: {change}{f', range {interval}' if interval else ''}. {WHICH_PEOPLE}"
+
+
+def _affected(figure: Figure, people: int) -> str:
+    """``12 (12%)``."""
+    if isinstance(figure.estimate, Gap):
+        return NOT_GIVEN
+    return f"{_whole(figure.estimate, people)} ({_percent(figure, people)})"
