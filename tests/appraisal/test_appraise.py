@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import importlib
 import subprocess
 import sys
 
@@ -10,7 +11,7 @@ import pytest
 from fourcount.appraisal import appraise as module
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded
-from fourcount.appraisal.postponing import NEED_NUMPY, numbers_loaded, postponed
+from fourcount.appraisal.postponing import NEED_NUMPY, _loaded, postponed
 from fourcount.record.paper import Choices
 from fourcount.stats.methods import FAMILIES
 from fourcount.stats.results import Counts
@@ -91,13 +92,15 @@ def test_a_small_table_postpones_nothing_once_loaded():
     assert frozenset() == postponed(small, Choices(), loaded=False)
 
 
-def test_a_library_in_the_middle_of_its_import_is_not_loaded(monkeypatch):
+def test_a_library_in_the_middle_of_its_import_is_not_loaded(tmp_path, monkeypatch):
     """Whoever used a half-imported library would wait for it, so it does not count as loaded."""
-    import scipy.special
-
-    assert numbers_loaded()
-    monkeypatch.setattr(scipy.special.__spec__, "_initializing", True, raising=False)
-    assert not numbers_loaded()
+    source = "from fourcount.appraisal.postponing import _loaded\nseen = _loaded(__name__)\n"
+    (tmp_path / "half_imported_library.py").write_text(source, encoding="utf-8")
+    monkeypatch.syspath_prepend(str(tmp_path))
+    assert not _loaded("half_imported_library")
+    library = importlib.import_module("half_imported_library")
+    assert not library.seen
+    assert _loaded("half_imported_library")
 
 
 LIGHT = """

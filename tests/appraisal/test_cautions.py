@@ -205,9 +205,13 @@ def test_through_no_effect(facts, cells, through, design):
 
 
 def test_through_no_effect_by_the_odds_ratio_where_the_difference_has_no_interval(facts):
-    """5/5 v 8/8: the textbook difference has no interval, and the odds ratio's decides."""
-    found = facts(0, 20, 0, 20, family="textbook")
-    assert ("through-no-effect" in found) == ("half-added" in found)
+    """0/20 v 0/20: the textbook difference has no interval, and that of the odds ratio decides."""
+    assert facts(0, 20, 0, 20, family="textbook")["through-no-effect"] == [{}]
+
+
+def test_through_no_effect_not_where_nothing_has_an_interval(facts):
+    """Nobody in a group: no interval, so none that goes through no effect."""
+    assert "through-no-effect" not in facts(0, 0, 3, 17)
 
 
 def test_family_parts_where_p_and_interval_differ(facts):
@@ -222,8 +226,8 @@ def test_family_parts_follows_the_level(facts):
 
 
 def test_family_parts_not_while_the_test_has_no_value(facts):
-    """A table with one outcome only has nothing to part."""
-    assert "family-parts" not in facts(0, 20, 0, 20, family="textbook")
+    """Nobody in a group: neither a p nor an interval that could part."""
+    assert "family-parts" not in facts(0, 0, 3, 17)
 
 
 @pytest.mark.parametrize(
