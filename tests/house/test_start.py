@@ -52,6 +52,7 @@ def fresh_machine(
         monkeypatch.setattr(setup, "is_ready", lambda lock: False)
         monkeypatch.setattr(setup, "make_ready", never)
         monkeypatch.setattr(needs, "_apt_install", never)
+        monkeypatch.setattr(needs, "_may_answer", lambda display: display == ":0")
         monkeypatch.setattr(needs, "_loads", lambda library: library not in lacks)
         monkeypatch.setattr(needs.importlib.util, "find_spec", lambda name: None if name in lacks else object())
         there = {"Xvfb", "xvfb-run", "xauth", "openbox"} | ({"apt-get"} if apt else set())
@@ -151,25 +152,35 @@ def test_what_apt_did_not_mend_is_said(
         needs.require(lambda: [needs.Need("libEGL.so.1", "libegl1")], lambda line: None)
 
 
+@pytest.mark.parametrize(
+    ("display", "says"), [("", "neither DISPLAY nor WAYLAND_DISPLAY is set"), (":7", "nothing answers at DISPLAY=:7")]
+)
 def test_no_screen_is_said_before_all_else(
     scripts: dict[str, ModuleType],
     fresh_machine: Callable[..., None],
     monkeypatch: pytest.MonkeyPatch,
     capsys: pytest.CaptureFixture[str],
+    display: str,
+    says: str,
 ) -> None:
     """Without a screen no window is tried, since Qt would blame a library for it."""
     fresh_machine()
-    for name in ("DISPLAY", "WAYLAND_DISPLAY", "QT_QPA_PLATFORM"):
+    for name in ("WAYLAND_DISPLAY", "QT_QPA_PLATFORM"):
         monkeypatch.delenv(name, raising=False)
+    monkeypatch.setenv("DISPLAY", display)
     assert scripts["start"].main([]) == 1
     said = capsys.readouterr().err.strip()
     assert "no screen" in said
+    assert says in said
     assert is_one_sentence(said)
 
 
 @pytest.mark.parametrize("environ", [SCREEN, {"WAYLAND_DISPLAY": "wayland-0"}, {"QT_QPA_PLATFORM": "offscreen"}])
-def test_a_screen_of_any_kind_will_do(needs: ModuleType, environ: dict[str, str]) -> None:
+def test_a_screen_of_any_kind_will_do(
+    needs: ModuleType, monkeypatch: pytest.MonkeyPatch, environ: dict[str, str]
+) -> None:
     """X, Wayland and Qt's own platforms without a screen are all accepted."""
+    monkeypatch.setattr(needs, "_may_answer", lambda display: display == ":0")
     assert needs.require_screen(environ, "linux") is None
 
 
