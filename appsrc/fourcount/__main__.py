@@ -1,0 +1,210 @@
+"""The command: a window, or the figures of one table in a terminal.
+
+What is typed wrongly is answered with one sentence on stderr and exit status 2. Nothing here loads Qt but the window.
+"""
+
+from __future__ import annotations
+
+import argparse
+import json
+import os
+import re
+import sys
+from collections.abc import Mapping, Sequence
+from typing import TYPE_CHECKING, NoReturn, TextIO
+
+from fourcount import __version__
+
+if TYPE_CHECKING:
+    from fourcount.publish.answer import Question
+
+COUNTS_NEEDED = 4
+GOOD, FAILED, MISTYPED = 0, 1, 2
+
+HELP = """\
+fourcount                              open the window
+fourcount answer A B C D [options]     what the four counts of one table say
+
+A and B are people with and without the event in the index group, C and D those in the reference group.
+
+options of answer:
+  --design DESIGN      trial, cohort, survey or case-control (trial)
+  --level PERCENT      confidence level, 80 to 99.9 (95)
+  --intervals FAMILY   score, textbook or exact (score)
+  --baseline RISK      a patient's starting risk, such as 12% or '12 in 100'
+  --welcome            the event is a good one
+  --json               every figure by every method, for a program to read
+
+  --version            the version of the program
+  --help               this page
+"""
+NO_DISPLAY = "Fourcount cannot open a window: no display is there (neither DISPLAY nor WAYLAND_DISPLAY is set)."
+
+_MINUS_NUMBER = re.compile(r"-[0-9.,]")
+
+
+class MistypedError(Exception):
+    """The command line asks for something that there is not; its text is one plain sentence."""
+
+
+class _Parser(argparse.ArgumentParser):
+    """A parser whose complaints are exceptions, so that one place says them."""
+
+    def error(self, message: str) -> NoReturn:
+        option = re.match(r"argument (\S+): expected one argument", message)
+        raise MistypedError(
+            f"{option[1]} needs a value after it." if option else f"These options do not fit: {message}."
+        )
+
+
+def main(arguments: Sequence[str] | None = None) -> int:
+    """Run the command and return its exit status."""
+    given = sys.argv[1:] if arguments is None else list(arguments)
+    try:
+        return _run(given)
+    except MistypedError as mistake:
+        print(f"fourcount: {mistake}", file=sys.stderr)
+        return MISTYPED
+    except BrokenPipeError:
+        _let_go_of(sys.stdout)
+        return FAILED
+
+
+def _run(given: list[str]) -> int:
+    if not given:
+        return _open_window()
+    if given[0] == "answer":
+        return _answer(given[1:])
+    if given[0] in ("--help", "-h"):
+        return _say(HELP)
+    if given[0] == "--version":
+        return _say(f"fourcount {__version__}\n")
+    kind = "option" if given[0].startswith("-") else "command"
+    raise MistypedError(f"There is no {kind} {_quoted(given[0])}: try 'fourcount --help'.")
+
+
+def _answer(given: list[str]) -> int:
+    # Behind a blank a negative number is no option to argparse, and our own sentence can say what is wrong with it.
+    shielded = [f" {word}" if _MINUS_NUMBER.match(word) else word for word in given]
+    wanted, unknown = _answer_parser().parse_known_intermixed_args(shielded)
+    if wanted.help:
+        return _say(HELP)
+    if wanted.version:
+        return _say(f"fourcount {__version__}\n")
+    if unknown:
+        raise MistypedError(f"There is no option {_quoted(unknown[0])}: try 'fourcount --help'.")
+    question = _question(wanted)
+    from fourcount.appraisal.appraise import appraise
+
+    outcome, choices = question.outcome, question.choices
+    findings = appraise(outcome, choices)
+    if wanted.json:
+        from fourcount.publish.contract import contract
+
+        return _say(json.dumps(contract(outcome, choices, findings), indent=2, allow_nan=False) + "\n")
+    from fourcount.publish.listing import listing
+
+    return _say(listing(outcome, findings, choices))
+
+
+def _question(wanted: argparse.Namespace) -> Question:
+    """The counts and options as read; MistypedError with the sentence of whatever cannot be."""
+    from fourcount.publish.answer import asked
+
+    if len(wanted.counts) != COUNTS_NEEDED:
+        raise MistypedError(f"Four counts are needed after 'answer', and {len(wanted.counts)} are there.")
+    try:
+        return asked(
+            tuple(_count(text) for text in wanted.counts),
+            design=wanted.design,
+            level=_level(wanted.level),
+            intervals=wanted.intervals,
+            baseline=wanted.baseline,
+            unwelcome=not wanted.welcome,
+        )
+    except ValueError as mistake:
+        raise MistypedError(str(mistake)) from None
+
+
+def _count(text: str) -> int:
+    """One plain count; a total or a percentage beside it has no place here, since four counts say it all."""
+    from fourcount.record.entry.cell import read_cell
+    from fourcount.record.entry.digits import specimen
+    from fourcount.record.entry.readings import Blank, Unreadable
+    from fourcount.wording.gaps import mark_text
+
+    reading = read_cell(text)
+    if isinstance(reading, Blank):
+        raise ValueError("A count is empty: a whole number of people is needed, such as 38.")
+    if isinstance(reading, Unreadable):
+        raise ValueError(f"{mark_text(reading)}.")
+    if reading.total is not None or reading.percent_text is not None:
+        raise ValueError(f"{specimen(text)}: only the count itself is needed here, such as {reading.value}.")
+    return reading.value
+
+
+def _level(text: str) -> float:
+    from fourcount.record.entry.level import read_level
+    from fourcount.record.entry.readings import Blank, Unreadable
+    from fourcount.wording.gaps import mark_text
+
+    reading = read_level(text)
+    if isinstance(reading, Blank):
+        raise ValueError("The level is empty: a confidence level such as 95% is needed.")
+    if isinstance(reading, Unreadable):
+        raise ValueError(f"{mark_text(reading)}.")
+    return reading.value
+
+
+def _answer_parser() -> _Parser:
+    # Nothing is checked here but the grammar: what a value may be is said by our own sentences.
+    parser = _Parser(prog="fourcount answer", add_help=False, allow_abbrev=False)
+    parser.add_argument("counts", nargs="*")
+    parser.add_argument("--design", default="trial")
+    parser.add_argument("--level", default="95")
+    parser.add_argument("--intervals", default="score")
+    parser.add_argument("--baseline")
+    for switch in ("--welcome", "--json", "--version"):
+        parser.add_argument(switch, action="store_true")
+    parser.add_argument("--help", "-h", action="store_true")
+    return parser
+
+
+def _open_window() -> int:
+    if sys.platform.startswith("linux") and not _display_in(os.environ):
+        print(f"fourcount: {NO_DISPLAY}", file=sys.stderr)
+        return FAILED
+    from fourcount.face.application import run
+
+    return int(run(None))
+
+
+def _display_in(environment: Mapping[str, str]) -> bool:
+    """Whether there is anything to open a window on. Without it Qt would blame a library and abort."""
+    return any(environment.get(name) for name in ("DISPLAY", "WAYLAND_DISPLAY", "QT_QPA_PLATFORM"))
+
+
+def _say(text: str) -> int:
+    """Write to stdout at once, so that a reader who has gone is noticed here and not while Python ends."""
+    if sys.stdout.encoding.lower().replace("-", "") != "utf8" and hasattr(sys.stdout, "reconfigure"):
+        sys.stdout.reconfigure(errors="replace")
+    sys.stdout.write(text)
+    sys.stdout.flush()
+    return GOOD
+
+
+def _let_go_of(stream: TextIO) -> None:
+    """Point a broken pipe to nowhere; Python would complain about it on its way out."""
+    nowhere = os.open(os.devnull, os.O_WRONLY)
+    os.dup2(nowhere, stream.fileno())
+    os.close(nowhere)
+
+
+def _quoted(text: str) -> str:
+    from fourcount.record.entry.digits import specimen
+
+    return f"'{specimen(text)}'"
+
+
+if __name__ == "__main__":
+    sys.exit(main())

@@ -1,0 +1,158 @@
+"""Four counts in, the published dictionary out: the way in for other programs, without a window."""
+
+from __future__ import annotations
+
+import operator
+import reprlib
+from dataclasses import dataclass
+from decimal import Decimal
+from numbers import Real
+from typing import cast
+
+from fourcount.appraisal.appraise import appraise
+from fourcount.publish.contract import contract
+from fourcount.record.entry.cell import LARGEST_COUNT
+from fourcount.record.entry.readings import Blank, Unreadable
+from fourcount.record.entry.risk import read_risk
+from fourcount.record.outcome import CELLS, DESIGNS, Design, EventsAndOthers, Outcome, Patient
+from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family
+from fourcount.wording.gaps import mark_text
+
+COUNT_NAMES = ("index events", "index non-events", "reference events", "reference non-events")
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class Question:
+    """Four counts of an unpaired table, checked, and what is asked of them."""
+
+    counts: tuple[int, ...]
+    design: Design
+    level: float
+    intervals: Family
+    baseline_text: str
+    unwelcome: bool
+
+    @property
+    def outcome(self) -> Outcome:
+        """The outcome that a reader would have typed: the index group first, the events left."""
+        cells = dict(zip(CELLS, map(str, self.counts), strict=True))
+        return Outcome(
+            table=EventsAndOthers(**cells),
+            design=self.design,
+            left_welcome=not self.unwelcome,
+            patient=Patient(starting_risk_text=self.baseline_text),
+        )
+
+    @property
+    def choices(self) -> Choices:
+        return Choices(family=self.intervals, level=self.level)
+
+
+def answer(  # noqa: PLR0913 - four counts, and five choices by name
+    index_events: int,
+    index_non_events: int,
+    reference_events: int,
+    reference_non_events: int,
+    *,
+    design: str = "trial",
+    level: float = 0.95,
+    intervals: str = "score",
+    baseline: float | str | None = None,
+    unwelcome: bool = True,
+) -> dict[str, object]:
+    """Everything that four counts say, as plain dictionaries, lists, numbers and strings.
+
+    Parameters
+    ----------
+    index_events, index_non_events, reference_events, reference_non_events : int
+        People with and without the event in each group, 0 to 10^9.
+    design : {"trial", "cohort", "survey", "case-control"}
+        What the design cannot give is withheld, with the reason.
+    level : float
+        The confidence level as a fraction, 0.80 to 0.999.
+    intervals : {"score", "textbook", "exact"}
+        The family whose intervals stand under ``measures``; ``methods`` holds all of them.
+    baseline : float, str or None
+        A starting risk from outside the study: a fraction from 0 to 1, or a text such as "12%" or "12 in 100".
+    unwelcome : bool
+        Whether the event is a bad one, which decides between NNTB and NNTH.
+
+    Raises
+    ------
+    ValueError
+        With one plain sentence, where an argument is none of these.
+    """
+    question = asked(
+        (index_events, index_non_events, reference_events, reference_non_events),
+        design=design,
+        level=level,
+        intervals=intervals,
+        baseline=baseline,
+        unwelcome=unwelcome,
+    )
+    outcome, choices = question.outcome, question.choices
+    return contract(outcome, choices, appraise(outcome, choices))
+
+
+def asked(
+    counts: tuple[object, ...], *, design: object, level: object, intervals: object, baseline: object, unwelcome: object
+) -> Question:
+    """The question, each part of it checked; ValueError with one plain sentence otherwise."""
+    whole = tuple(_count(value, name) for value, name in zip(counts, COUNT_NAMES, strict=True))
+    if design not in DESIGNS:
+        raise ValueError(f"The design must be one of {', '.join(DESIGNS)}, not {_shown(design)}.")
+    if intervals not in FAMILIES:
+        raise ValueError(f"The intervals must be one of {', '.join(FAMILIES)}, not {_shown(intervals)}.")
+    if not isinstance(unwelcome, bool):
+        raise ValueError(f"Whether the event is unwelcome must be True or False, not {_shown(unwelcome)}.")
+    return Question(
+        counts=whole,
+        design=design,
+        level=_level(level),
+        intervals=intervals,
+        baseline_text=_baseline_text(baseline),
+        unwelcome=unwelcome,
+    )
+
+
+def _count(value: object, name: str) -> int:
+    """The count; anything that is a whole number by its type will do, a truth value will not."""
+    try:
+        count = -1 if isinstance(value, bool) else operator.index(value)  # type: ignore[arg-type]
+    except TypeError:
+        count = -1
+    if not 0 <= count <= LARGEST_COUNT:
+        raise ValueError(f"The {name} must be a whole number from 0 to {LARGEST_COUNT:,}, not {_shown(value)}.")
+    return count
+
+
+def _level(level: object) -> float:
+    usable = isinstance(level, Real) and not isinstance(level, bool)
+    if not usable or not LOWEST_LEVEL <= cast(float, level) <= HIGHEST_LEVEL:
+        allowed = f"a fraction from {LOWEST_LEVEL:.2f} to {HIGHEST_LEVEL}"
+        raise ValueError(f"The level must be {allowed}, such as 0.95, not {_shown(level)}.")
+    return float(cast(float, level))
+
+
+def _baseline_text(baseline: object) -> str:
+    """The starting risk as a reader would type it; a fraction is written so that it reads back as the same number."""
+    if baseline is None:
+        return ""
+    if isinstance(baseline, str):
+        reading = read_risk(baseline)
+        if isinstance(reading, Unreadable):
+            raise ValueError(f"The baseline cannot be used: {mark_text(reading)}.")
+        if isinstance(reading, Blank):
+            raise ValueError("The baseline is empty: a risk such as 12% is needed, or none.")
+        return baseline
+    usable = isinstance(baseline, Real) and not isinstance(baseline, bool)
+    if not usable or not 0 <= cast(float, baseline) <= 1:
+        raise ValueError(f"The baseline must be a fraction from 0 to 1, or a text such as 12%, not {_shown(baseline)}.")
+    return f"{Decimal(repr(float(cast(float, baseline)))).scaleb(2):f}%"
+
+
+def _shown(value: object) -> str:
+    """What was given, short enough for a sentence. Python refuses to write out a whole number of great length."""
+    if isinstance(value, int) and abs(value) > 10**40:
+        return "a number as large as that" if value > 0 else "a number as small as that"
+    return reprlib.repr(value)

@@ -1,0 +1,157 @@
+"""The findings of one outcome as a table for a spreadsheet: numbers unrounded, one measure a row."""
+
+from __future__ import annotations
+
+from math import isinf
+
+from fourcount.appraisal.findings import (
+    Conversion,
+    Counts,
+    Figure,
+    Gap,
+    NumberNeeded,
+    NumberNeededLimit,
+    OutcomeFindings,
+    PatientFindings,
+)
+from fourcount.publish.plain_text import one_line
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.wording import labels, lines, names, numbers
+from fourcount.wording.cautions import STANDING_FULL, caution_text
+from fourcount.wording.gaps import gap_text
+
+Row = tuple[str, str, str, str, str]
+
+HEAD: Row = ("measure", "estimate", "low", "high", "method")
+INFINITY = "infinity"
+THROUGH_INFINITY = "the interval runs through infinity"
+HALF_ADDED = "half added to each count"
+UNROUNDED = "Risks and differences are fractions, index minus reference; all figures are unrounded. Level {level}."
+P_NAME = "p, two-sided"
+CONVERTED = "Odds ratio as a risk ratio at {baseline}"
+PATIENT = "{column}, {baseline}: {name}"
+
+# Behind any blanks, a spreadsheet takes these for the beginning of a formula, and a quotation mark for that of a field
+# that goes on over tabs and lines.
+_TAKEN_FOR_MORE = ("=", "+", "-", "@", "\uff1d", "\uff0b", "\uff0d", "\uff20", "\u2212", '"', "'")
+
+
+def rows(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
+    """The head, the counts, every measure, p, the patient and the cautions; the same five columns throughout.
+
+    A figure that is not given has blank cells, and the reason stands under "method". Only cells that hold a number
+    may begin with a minus sign: all others are text to a spreadsheet, whatever the reader typed.
+    """
+    cautions = [caution_text(caution) for caution in findings.cautions]
+    table = (
+        HEAD,
+        *_counts(outcome, findings.counts),
+        *(_measure(line.name, findings.measures[line.key]) for line in lines.measure_lines(outcome, findings, choices)),
+        _p(findings),
+        *_converted(findings.conversion),
+        *_patient(findings.patient),
+        *(_text(caution) for caution in cautions),
+        _text(UNROUNDED.format(level=numbers.level(choices.level))),
+        *(_text(sentence) for sentence in STANDING_FULL),
+    )
+    return tuple((_safe(name), estimate, low, high, _safe(method)) for name, estimate, low, high, method in table)
+
+
+def tsv(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """The rows with tabs between their cells: what a spreadsheet takes from the clipboard."""
+    return "".join("\t".join(row) + "\n" for row in rows(outcome, findings, choices))
+
+
+def _counts(outcome: Outcome, counts: Counts | Gap) -> tuple[Row, ...]:
+    """People with the event, and all people, of each group."""
+    if isinstance(counts, Gap):
+        return ()
+    groups: tuple[tuple[names.Group, int, int], ...] = (
+        ("reference", counts.reference_events, counts.reference_total),
+        ("index", counts.index_events, counts.index_total),
+    )
+    table: list[Row] = []
+    for group, events, total in groups:
+        label = names.label(outcome, group)
+        table.append((f"People in the group {label} who {names.event_words(outcome)}", str(events), "", "", ""))
+        table.append((f"People in the group {label}, all", str(total), "", "", ""))
+    return tuple(table)
+
+
+def _measure(name: str, measure: Figure | NumberNeeded | Gap) -> Row:
+    if isinstance(measure, Gap):
+        return (name, "", "", "", gap_text(measure))
+    return _number_needed(name, measure) if isinstance(measure, NumberNeeded) else _figure(name, measure)
+
+
+def _figure(name: str, figure: Figure) -> Row:
+    interval = figure.interval
+    low, high = (interval, interval) if isinstance(interval, Gap) else (interval.low, interval.high)
+    adjusted = "" if isinstance(interval, Gap) or interval.adjusted is None else HALF_ADDED
+    reasons = [gap_text(part) for part in (figure.estimate, low, high) if isinstance(part, Gap)]
+    method = "; ".join(part for part in (figure.method, adjusted, *dict.fromkeys(reasons)) if part)
+    return (name, _number(figure.estimate), _number(low), _number(high), method)
+
+
+def _number_needed(name: str, needed: NumberNeeded) -> Row:
+    through = THROUGH_INFINITY if needed.through_infinity else ""
+    low, high = _needed_limit(needed.low, needed), _needed_limit(needed.high, needed)
+    return (name, _number(needed.estimate), low, high, through)
+
+
+def _needed_limit(limit: NumberNeededLimit, needed: NumberNeeded) -> str:
+    """A limit with its own kind in front where that is not the estimate's."""
+    value = _number(limit.value)
+    return value if limit.kind in (needed.kind, "neither") else f"{limit.kind} {value}"
+
+
+def _p(findings: OutcomeFindings) -> Row:
+    test = findings.test
+    if isinstance(test, Gap):
+        return (P_NAME, "", "", "", gap_text(test))
+    reason = f"; {gap_text(test.p)}" if isinstance(test.p, Gap) else ""
+    return (P_NAME, _number(test.p), "", "", f"{test.method}{reason}")
+
+
+def _converted(conversion: Conversion | Gap) -> tuple[Row, ...]:
+    if isinstance(conversion, Gap):
+        return ()
+    baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
+    return (_figure(CONVERTED.format(baseline=baseline), conversion.risk_ratio),)
+
+
+def _patient(patient: PatientFindings | Gap) -> tuple[Row, ...]:
+    """Only at a starting risk from elsewhere: at the study's own the rows above say the same."""
+    if isinstance(patient, Gap) or patient.baseline_from == "reference":
+        return ()
+    baseline = lines.baseline_text(patient.baseline, patient.baseline_from)
+    needed = patient.number_needed
+    kind = "NNT" if isinstance(needed, Gap) or needed.kind == "neither" else needed.kind
+
+    def named(name: str) -> str:
+        return PATIENT.format(column=labels.COLUMNS["patient"], baseline=baseline, name=name)
+
+    return (
+        _figure(named("risk with"), patient.with_),
+        _figure(named("difference"), patient.difference),
+        _measure(named(kind), needed),
+        _figure(named("risk ratio"), patient.risk_ratio),
+    )
+
+
+def _text(sentence: str) -> Row:
+    return (sentence, "", "", "", "")
+
+
+def _number(number: float | Gap) -> str:
+    """The number in full, the point as its decimal mark; blank where there is none."""
+    if isinstance(number, Gap):
+        return ""
+    return INFINITY if isinf(number) else repr(float(number))
+
+
+def _safe(text: str) -> str:
+    """The text on one line, behind an apostrophe where a spreadsheet would take it for more than text."""
+    line = one_line(text)
+    return f"'{line}" if line.startswith(_TAKEN_FOR_MORE) else line
