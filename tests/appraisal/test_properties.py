@@ -82,6 +82,10 @@ def test_whatever_is_typed_every_figure_is_a_number_or_a_reason(question):
 
 
 @given(questions())
+@example(
+    # The odds ratio's limits, 1.1e16 and 1.2e17, are the same risk ratio to the last bit at 99.9%.
+    (outcome((4, 10**9, 10**9, 7), counted="right", patient=Patient(starting_risk_text="99.9%")), Choices())
+)
 def test_every_interval_is_in_order_and_a_measure_has_both_limits(question):
     """The lower limit is never above the upper one; risks lie between 0 and 1."""
     findings = appraise(*question)

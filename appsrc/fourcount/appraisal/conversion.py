@@ -44,7 +44,8 @@ def _mapped_interval(
         return low if isinstance(high, Gap) else Range(low=low, high=high, adjusted=interval.adjusted)
     if isinstance(high, Gap):
         return Range(low=low, high=high, adjusted=interval.adjusted)
-    return Interval(low=low, high=high, adjusted=interval.adjusted)
+    # Limits that agree to the last bit or two can come out of the function in the other order.
+    return Interval(low=min(low, high), high=max(low, high), adjusted=interval.adjusted)
 
 
 def undetermined(odds_ratio: float, baseline: float) -> bool:
