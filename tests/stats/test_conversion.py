@@ -1,0 +1,77 @@
+"""Effects carried to a starting risk."""
+
+from __future__ import annotations
+
+import math
+
+import pytest
+from hypothesis import given, settings
+from hypothesis import strategies as st
+
+from fourcount.stats.conversion import risk_ratio_from_odds_ratio, risk_with
+from fourcount.stats.results import GAP_KEYS, Gap
+
+RISKS = st.floats(1e-9, 1 - 1e-9)
+RATIOS = st.floats(1e-6, 1e6)
+
+
+@pytest.mark.parametrize(
+    ("odds_ratio", "baseline", "risk_ratio"),
+    [(0.6, 0.906, 0.941029), (3.0, 0.1, 2.5), (0.5, 0.5, 0.666667), (4, 0, 4), (4, 1, 1), (1, 0.37, 1)],
+)
+def test_zhang_and_yu(odds_ratio: float, baseline: float, risk_ratio: float) -> None:
+    """Zhang and Yu 1998, JAMA 280:1690: their equation at a few points and at its edges."""
+    assert risk_ratio_from_odds_ratio(odds_ratio, baseline) == pytest.approx(risk_ratio, abs=5e-7)
+
+
+def test_the_handbook_carries_an_odds_ratio() -> None:
+    """Cochrane Handbook 15.4.4: OR 0.73 at 30% is 62 fewer per 1000; RR 0.92 at 30% is 24 fewer."""
+    by_odds, by_risk = risk_with("odds_ratio", 0.73, 0.3), risk_with("risk_ratio", 0.92, 0.3)
+    assert isinstance(by_odds, float)
+    assert isinstance(by_risk, float)
+    assert round(1000 * (0.3 - by_odds)) == 62
+    assert round(1000 * (0.3 - by_risk)) == 24
+
+
+@settings(max_examples=100)
+@given(odds_ratio=RATIOS, baseline=RISKS)
+def test_both_ways_to_the_risk_are_one(odds_ratio: float, baseline: float) -> None:
+    """The odds ratio's risk is the starting risk times its risk ratio, and the odds ratio comes back from it."""
+    carried = risk_with("odds_ratio", odds_ratio, baseline)
+    assert isinstance(carried, float)
+    assert 0 < carried <= 1
+    assert carried == pytest.approx(baseline * risk_ratio_from_odds_ratio(odds_ratio, baseline), rel=1e-13)
+    if carried < 0.999:
+        assert carried / (1 - carried) * (1 - baseline) / baseline == pytest.approx(odds_ratio, rel=1e-9)
+
+
+def test_more_than_everybody_is_a_gap() -> None:
+    """A risk ratio that asks for more than 100% gives no risk, and is never cut to 100%."""
+    assert risk_with("risk_ratio", 3.0, 0.4) == Gap("beyond-one")
+    assert risk_with("risk_ratio", math.inf, 0.4) == Gap("beyond-one")
+    assert risk_with("risk_ratio", 2.5, 0.4) == 1.0
+    assert "beyond-one" in GAP_KEYS
+
+
+@pytest.mark.parametrize("baseline", [0.07, 0.12, 0.3, 0.49, 0.93])
+def test_the_last_bit_of_100_percent_is_no_excess(baseline: float) -> None:
+    """The reciprocal of a starting risk carries it to 100% exactly."""
+    assert risk_with("risk_ratio", 1 / baseline, baseline) == pytest.approx(1.0, rel=1e-15)
+
+
+def test_infinite_effects() -> None:
+    """A certain event: risk 1, risk ratio 1/P0; at a starting risk of 0 an infinite effect says nothing."""
+    assert risk_with("odds_ratio", math.inf, 0.2) == 1.0
+    assert risk_ratio_from_odds_ratio(math.inf, 0.2) == 5.0
+    assert risk_ratio_from_odds_ratio(math.inf, 0.0) == math.inf
+    for effect in ("odds_ratio", "risk_ratio"):
+        assert risk_with(effect, math.inf, 0.0) == Gap("undetermined-at-baseline")  # type: ignore[arg-type]
+
+
+def test_an_effect_of_nothing() -> None:
+    """A ratio of 0 brings any risk to 0, but says nothing as odds at a starting risk of 1."""
+    assert risk_with("risk_ratio", 0.0, 0.3) == risk_with("odds_ratio", 0.0, 0.3) == 0.0
+    assert risk_with("odds_ratio", 0.0, 1.0) == Gap("undetermined-at-baseline")
+    assert risk_with("risk_ratio", 0.0, 1.0) == 0.0
+    assert risk_with("odds_ratio", 0.7, 1.0) == 1.0
+    assert risk_with("odds_ratio", 0.7, 0.0) == 0.0
