@@ -125,14 +125,18 @@ COPIED = {
 NOTHING_TO_COPY = "There is nothing to copy yet: type the four counts first."
 
 CLOSE_TITLE = "Close Fourcount?"
-CLOSE_QUESTION = "This version keeps no file. Closing the window discards what was typed; copy the figures first if you need them."
+CLOSE_QUESTION = (
+    "This version keeps no file. Closing the window discards what was typed; copy the figures first if you need them."
+)
 CLOSE_YES = "Discard and close"
 CLOSE_NO = "Keep working"
 
 LEVEL_TITLE = "Confidence level"
 LEVEL_QUESTION = "A level from 80% to 99.9%:"
 
-UNEXPECTED = "Something unexpected happened ({name}); your table is untouched. Details without your numbers are in {place}."
+UNEXPECTED = (
+    "Something unexpected happened ({name}); your table is untouched. Details without your numbers are in {place}."
+)
 UNEXPECTED_NO_LOG = "Something unexpected happened ({name}); your table is untouched."
 DISMISS = "Dismiss"
 
@@ -150,3 +154,9 @@ ABOUT = (
     "Free software under the MIT licence. It works offline, sends nothing, and keeps no file.",
     "Text in the system's font {font}; computed with numpy {numpy} and scipy {scipy}; drawn with Qt {qt}.",
 )
+
+HELP_TITLES = {"methods": "Methods and sources", "keys": "Keys", "about": "About Fourcount"}
+HELP_LIMITS = "What this program leaves out, and what it is for"
+NO_KEYS = "menu only"
+
+MISSING = "Still to be named: {names}."

@@ -1,0 +1,91 @@
+"""Every command in one table: its menu, its keys, and whether it can be on or off."""
+
+from __future__ import annotations
+
+from typing import NamedTuple
+
+from PySide6.QtGui import QAction, QKeySequence
+from PySide6.QtWidgets import QMainWindow, QMenu
+
+from fourcount.wording import labels
+
+Keys = QKeySequence.StandardKey | str | None
+
+
+class Command(NamedTuple):
+    """A command: its key in the words, its menu, and its shortcut (a standard one follows the platform)."""
+
+    key: str
+    menu: str
+    keys: Keys = None
+    checkable: bool = False
+    parts_from_last: bool = False
+
+
+Standard = QKeySequence.StandardKey
+COMMANDS = (
+    Command("new", "file", Standard.New),
+    Command("example", "file", "Ctrl+E"),
+    Command("quit", "file", Standard.Quit, parts_from_last=True),
+    Command("undo", "edit", Standard.Undo),
+    Command("redo", "edit", Standard.Redo),
+    Command("copy-text", "edit", "Ctrl+Shift+C", parts_from_last=True),
+    Command("copy-table", "edit", "Ctrl+Shift+T"),
+    Command("copy-picture", "edit", "Ctrl+Shift+P"),
+    Command("swap", "table", "Ctrl+G"),
+    Command("count-other", "table", "Ctrl+Shift+O"),
+    Command("form", "table", "Ctrl+Shift+F", parts_from_last=True),
+    Command("layout", "table", "Ctrl+Shift+L"),
+    Command("first-cell", "table", "Ctrl+1", parts_from_last=True),
+    Command("clear", "table", "Ctrl+Shift+Backspace"),
+    Command("bigger", "view", Standard.ZoomIn),
+    Command("smaller", "view", Standard.ZoomOut),
+    Command("actual", "view", "Ctrl+0"),
+    Command("bars", "view", "Ctrl+B", checkable=True, parts_from_last=True),
+    Command("more", "view", "Ctrl+M", checkable=True),
+    Command("methods", "help", Standard.HelpContents),
+    Command("keys", "help", "Ctrl+/"),
+    Command("about", "help", "Ctrl+Shift+A"),
+)
+"""All commands in the order of the menus."""
+
+
+def make_actions(window: QMainWindow) -> dict[str, QAction]:
+    """One action for each command, not connected yet."""
+    actions = {}
+    for command in COMMANDS:
+        action = QAction(labels.COMMANDS[command.key], window)
+        action.setCheckable(command.checkable)
+        if isinstance(command.keys, str):
+            action.setShortcut(QKeySequence(command.keys))
+        elif command.keys is not None:
+            action.setShortcuts(command.keys)
+        if command.key == "redo":
+            action.setShortcuts([*QKeySequence.keyBindings(Standard.Redo), QKeySequence("Ctrl+Y")])
+        if command.key == "bigger":
+            action.setShortcuts([*QKeySequence.keyBindings(Standard.ZoomIn), QKeySequence("Ctrl+=")])
+        if command.key == "quit" and action.shortcut().isEmpty():
+            action.setShortcut(QKeySequence("Ctrl+Q"))
+        actions[command.key] = action
+    actions["about"].setMenuRole(QAction.MenuRole.AboutRole)
+    actions["quit"].setMenuRole(QAction.MenuRole.QuitRole)
+    return actions
+
+
+def fill_menus(window: QMainWindow, actions: dict[str, QAction]) -> dict[str, QMenu]:
+    """Hang the commands into the window's menus."""
+    menus = {key: window.menuBar().addMenu(words) for key, words in labels.MENUS.items()}
+    for command in COMMANDS:
+        if command.parts_from_last:
+            menus[command.menu].addSeparator()
+        menus[command.menu].addAction(actions[command.key])
+    return menus
+
+
+def shortcut_table(actions: dict[str, QAction]) -> list[tuple[str, str]]:
+    """Each command's keys as the platform writes them, and its name."""
+    rows = []
+    for command in COMMANDS:
+        keys = actions[command.key].shortcut().toString(QKeySequence.SequenceFormat.NativeText)
+        rows.append((keys, labels.COMMANDS[command.key].replace("&", "")))
+    return rows

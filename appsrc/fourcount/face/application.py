@@ -1,0 +1,60 @@
+"""Starting the window: the application, its look and settings, and what happens to unexpected errors."""
+
+from __future__ import annotations
+
+import signal
+import sys
+from pathlib import Path
+
+from PySide6.QtWidgets import QApplication
+
+from fourcount import __version__
+from fourcount.face.errors import ErrorListener
+from fourcount.face.later import Later
+from fourcount.face.look import Look
+from fourcount.face.session import Session
+from fourcount.face.settings import Settings, own_folder
+from fourcount.face.window import MainWindow
+from fourcount.record.paper import Choices, Record
+
+
+def make_application(arguments: list[str]) -> QApplication:
+    """The one application, named and in a style that takes our palette; the one that runs already if there is one."""
+    running = QApplication.instance()
+    if isinstance(running, QApplication):
+        return running
+    application = QApplication(arguments)
+    application.setApplicationName("Fourcount")
+    application.setApplicationVersion(__version__)
+    application.setDesktopFileName("fourcount")
+    application.setStyle("Fusion")
+    return application
+
+
+def make_window(settings_folder: Path, record: Record | None = None) -> MainWindow:
+    """A window on a record, or on an empty one with the choices last used."""
+    settings = Settings(settings_folder)
+    if record is None:
+        family, level = settings.choices()
+        record = Record(choices=Choices(family=family, level=level))
+    look = Look(settings.zoom(), settings.appearance())
+    window = MainWindow(Session(record), look, settings, Later())
+    look.setParent(window)
+    window.session.setParent(window)
+    return window
+
+
+def run(path: str | None = None) -> int:
+    """Open the window and stay until it is closed."""
+    application = make_application([sys.argv[0]])
+    folder = own_folder()
+    window = make_window(folder)
+    listener = ErrorListener(folder)
+    listener.happened.connect(window.tell_unexpected)
+    listener.install()
+    signal.signal(signal.SIGINT, signal.SIG_DFL)
+    window.show()
+    try:
+        return application.exec()
+    finally:
+        listener.remove()

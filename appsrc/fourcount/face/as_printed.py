@@ -1,0 +1,120 @@
+"""The first column: what the paper prints, in the form in which it prints it."""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import Signal
+from PySide6.QtGui import QAction
+from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout, QWidget
+
+from fourcount.face.fields import ChoiceField, TextField
+from fourcount.face.flow import FlowLayout
+from fourcount.face.grid import Grid
+from fourcount.face.links import Link
+from fourcount.face.look import Look
+from fourcount.face.text import Words
+from fourcount.record.outcome import EventsOfTotal, Outcome
+from fourcount.wording import labels
+
+if TYPE_CHECKING:
+    from fourcount.appraisal.findings import OutcomeFindings
+
+
+class AsPrinted(QWidget):
+    """Study, event, time span and the grid.
+
+    **Signals**
+        edited: a person changed a text. Carries the field and the text.
+        left: a field lost focus. Carries the field.
+        example_wanted: the quiet line of the first start was pressed.
+    """
+
+    edited = Signal(str, str)
+    left = Signal(str)
+    example_wanted = Signal()
+
+    def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
+        super().__init__()
+        self._look = look
+        self.design = ChoiceField(look, labels.FIELDS["design"], tuple(labels.DESIGNS.items()))
+        self.event_words = TextField(look, "left_words_text", labels.FIELDS["left_words_text"], labels.HINTS["words"])
+        self.welcome = ChoiceField(look, labels.FIELDS["welcome"], tuple(labels.WELCOME.items()))
+        self.span = TextField(look, "span_text", labels.FIELDS["span_text"], labels.HINTS["span_text"])
+        self.form = ChoiceField(look, labels.FIELDS["form"], tuple(labels.FORMS.items()))
+        self.layout_choice = ChoiceField(look, labels.FIELDS["layout"], tuple(labels.LAYOUTS.items()))
+        self.grid = Grid(look)
+        self.notes = Words(look, "small", "caution")
+        self.example = Link(look, labels.FIRST_STEP)
+        self.links = [Link(look, labels.LINK_WORDS[key], actions[key]) for key in ("swap", "count-other", "clear")]
+        self._build()
+        self._connect_all()
+
+    def show_state(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
+        """Show the outcome as typed, and a sentence for each marked cell."""
+        self.design.show_choice(outcome.design)
+        self.event_words.field = f"{outcome.counted}_words_text"
+        self.event_words.show_text(outcome.event_words_text)
+        self.welcome.show_choice("welcome" if outcome.welcome else "unwelcome")
+        self.span.show_text(outcome.span_text)
+        self.form.show_choice("events-of-total" if isinstance(outcome.table, EventsOfTotal) else "events-and-others")
+        self.layout_choice.show_choice(outcome.layout)
+        self.grid.show_state(outcome, findings)
+        self.example.setVisible(outcome == Outcome())
+        self._show_marks(findings)
+
+    def _show_marks(self, findings: OutcomeFindings | None) -> None:
+        reasons: dict[str, str] = {}
+        if findings and findings.marks:
+            from fourcount.wording.gaps import mark_text
+
+            reasons = {mark.field: mark_text(mark) for mark in findings.marks}
+        for field, cell in self.grid.cells.items():
+            cell.show_mark(reasons.get(field, ""))
+        self.notes.show_words("\n".join(text for field, text in reasons.items() if field in self.grid.cells))
+
+    def _build(self) -> None:
+        self._form_rows = QGridLayout()
+        self._form_rows.setContentsMargins(0, 0, 0, 0)
+        self._form_rows.setColumnStretch(1, 3)
+        self._form_rows.setColumnStretch(2, 2)
+        names = ("design", "left_words_text", "span_text", "form")
+        for row, name in enumerate(names):
+            self._form_rows.addWidget(Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False), row, 0)
+        self._form_rows.addWidget(self.design, 0, 1, 1, 2)
+        self._form_rows.addWidget(self.event_words, 1, 1)
+        self._form_rows.addWidget(self.welcome, 1, 2)
+        self._form_rows.addWidget(self.span, 2, 1, 1, 2)
+        printed = QHBoxLayout()
+        printed.addWidget(self.form, 3)
+        printed.addWidget(Words(self._look, "body", "muted", labels.FIELDS["layout"].lower(), wraps=False))
+        printed.addWidget(self.layout_choice, 2)
+        self._form_rows.addLayout(printed, 3, 1, 1, 2)
+        links = FlowLayout(self._look)
+        for link in self.links:
+            links.addWidget(link)
+        self._column = QVBoxLayout(self)
+        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["printed"].upper(), wraps=False))
+        self._column.addLayout(self._form_rows)
+        self._column.addWidget(self.grid)
+        self._column.addWidget(self.notes)
+        self._column.addLayout(links)
+        self._column.addWidget(self.example)
+        self._column.addStretch(1)
+        self._on_look_changed()
+
+    def _connect_all(self) -> None:
+        for field in (self.event_words, self.span):
+            field.edited.connect(self.edited)
+            field.left.connect(self.left)
+        self.grid.edited.connect(self.edited)
+        self.grid.left.connect(self.left)
+        self.example.clicked.connect(self.example_wanted)
+        self._look.changed.connect(self._on_look_changed)
+
+    def _on_look_changed(self) -> None:
+        px = self._look.px
+        self._column.setContentsMargins(px(24), px(20), px(24), px(16))
+        self._column.setSpacing(px(16))
+        self._form_rows.setHorizontalSpacing(px(12))
+        self._form_rows.setVerticalSpacing(px(4))

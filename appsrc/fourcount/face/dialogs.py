@@ -1,0 +1,98 @@
+"""The few questions that the window asks, one function each, and its help windows."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+from typing import TYPE_CHECKING
+
+from PySide6.QtWidgets import QInputDialog, QLineEdit, QMessageBox, QWidget
+
+from fourcount import __version__
+from fourcount.wording import labels
+
+if TYPE_CHECKING:
+    from PySide6.QtGui import QAction
+
+    from fourcount.face.help_window import HelpWindow, Part
+    from fourcount.face.look import Look
+
+
+def may_discard(parent: QWidget) -> bool:
+    """Ask whether what was typed may be lost."""
+    box = QMessageBox(parent)
+    box.setWindowTitle(labels.CLOSE_TITLE)
+    box.setText(labels.CLOSE_QUESTION)
+    discard = box.addButton(labels.CLOSE_YES, QMessageBox.ButtonRole.DestructiveRole)
+    keep = box.addButton(labels.CLOSE_NO, QMessageBox.ButtonRole.RejectRole)
+    box.setDefaultButton(keep)
+    box.setEscapeButton(keep)
+    box.exec()
+    return box.clickedButton() is discard
+
+
+def ask_level(parent: QWidget, now: str, problem: str = "") -> str | None:
+    """Ask for a confidence level, with what was wrong with the last answer; None if nothing was chosen."""
+    question = f"{problem}\n{labels.LEVEL_QUESTION}".strip()
+    text, accepted = QInputDialog.getText(parent, labels.LEVEL_TITLE, question, QLineEdit.EchoMode.Normal, now)
+    return text if accepted else None
+
+
+def methods_window(look: Look, parent: QWidget) -> HelpWindow:
+    """Every method with its formula and source, and what the program leaves out."""
+    from fourcount.wording.cautions import STANDING_FULL
+    from fourcount.wording.help import limits_of_the_program, methods_and_sources
+
+    parts: list[Part] = []
+    for heading, entries in methods_and_sources():
+        parts.append(("figure", heading))
+        for title, formula, source, note in entries:
+            parts.append(("strong", title))
+            parts.extend((role, text) for role, text in (("body", formula), ("body", note), ("small", source)) if text)
+    parts.append(("figure", labels.HELP_LIMITS))
+    parts.extend(("body", sentence) for sentence in (*limits_of_the_program(), *STANDING_FULL))
+    return _window(look, parent, labels.HELP_TITLES["methods"], parts)
+
+
+def keys_window(look: Look, parent: QWidget, shortcuts: Sequence[tuple[str, str]]) -> HelpWindow:
+    """The keys of every command, as this platform writes them."""
+    parts: list[Part] = [("body", labels.KEYS_INTRO)]
+    for keys, words in (*labels.KEYS_MORE, *shortcuts):
+        parts.append(("strong", keys or labels.NO_KEYS))
+        parts.append(("body", words))
+    return _window(look, parent, labels.HELP_TITLES["keys"], parts)
+
+
+def about_window(look: Look, parent: QWidget) -> HelpWindow:
+    """What this is, its version, and what it is built on."""
+    from importlib.metadata import PackageNotFoundError, version
+
+    from PySide6.QtCore import qVersion
+
+    from fourcount.face.look import family_in_use
+    from fourcount.wording.cautions import STANDING_FULL
+
+    def of(name: str) -> str:
+        try:
+            return version(name)
+        except PackageNotFoundError:
+            return ""
+
+    facts = {
+        "version": __version__,
+        "font": family_in_use(),
+        "numpy": of("numpy"),
+        "scipy": of("scipy"),
+        "qt": qVersion(),
+    }
+    first, *rest = (line.format(**facts) for line in labels.ABOUT)
+    parts: list[Part] = [("figure", first), *(("body", line) for line in rest)]
+    parts.extend(("body", sentence) for sentence in STANDING_FULL)
+    return _window(look, parent, labels.HELP_TITLES["about"], parts)
+
+
+def _window(look: Look, parent: QWidget, title: str, parts: Sequence[Part]) -> HelpWindow:
+    from fourcount.face.help_window import HelpWindow
+
+    window = HelpWindow(look, title, parent)
+    window.show_parts(parts)
+    return window

@@ -1,0 +1,191 @@
+"""The fields of the window: a line to type on, and a choice among a few. Both are a value over a hairline."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+
+from PySide6.QtCore import QEvent, QRect, QSize, Qt, Signal
+from PySide6.QtGui import QContextMenuEvent, QFocusEvent, QKeyEvent, QKeySequence, QPainter, QPaintEvent, QPen
+from PySide6.QtWidgets import QComboBox, QLineEdit, QSizePolicy, QStyle, QStyleOptionComboBox, QWidget
+
+from fourcount.face.look import Look, Role
+
+UNDOING = (QKeySequence.StandardKey.Undo, QKeySequence.StandardKey.Redo)
+
+
+def draw_underline(widget: QWidget, painter: QPainter, look: Look, marked: bool = False) -> None:
+    """Draw the edge of a field: a line under it, heavier in the accent's colour while it has the focus."""
+    focused = widget.hasFocus()
+    part = "caution" if marked else "accent" if focused else "outline"
+    width = 2 if focused or marked else 1
+    painter.fillRect(QRect(0, widget.height() - width, widget.width(), width), look.colour(part))
+
+
+class TextField(QLineEdit):
+    """One line of text that is kept as typed.
+
+    The window's undo is the only one: this field leaves Ctrl+Z to it.
+
+    **Signals**
+        edited: a person changed the text. Carries the field's key and the text.
+        left: the field lost focus. Carries its key.
+    """
+
+    edited = Signal(str, str)
+    left = Signal(str)
+
+    def __init__(self, look: Look, field: str, name: str, hint: str = "", role: Role = "body") -> None:
+        super().__init__()
+        self.field = field
+        self.marked = False
+        self._look = look
+        self._role: Role = role
+        self.setFrame(False)
+        self.setAccessibleName(name)
+        self.setPlaceholderText(hint)
+        self.setMinimumWidth(0)
+        self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
+        self.textEdited.connect(self._on_text_edited)
+        look.changed.connect(self._on_look_changed)
+        self._on_look_changed()
+
+    def show_text(self, text: str) -> None:
+        """Show a text without moving the cursor where it is the same already."""
+        if text != self.text():
+            self.setText(text)
+
+    def show_mark(self, reason: str) -> None:
+        """Mark the field with a reason, or take the mark away with an empty one."""
+        if bool(reason) != self.marked:
+            self.marked = bool(reason)
+            self.update()
+        if reason != self.accessibleDescription():
+            self.setAccessibleDescription(reason)
+            self.setToolTip(reason)
+
+    def sizeHint(self) -> QSize:
+        return QSize(self._look.px(80), self._look.px(30))
+
+    def minimumSizeHint(self) -> QSize:
+        return QSize(self._look.px(40), self._look.px(30))
+
+    def event(self, event: QEvent) -> bool:
+        if event.type() == QEvent.Type.ShortcutOverride and isinstance(event, QKeyEvent):
+            if any(event.matches(key) for key in UNDOING):
+                event.ignore()
+                return False
+        return super().event(event)
+
+    def keyPressEvent(self, event: QKeyEvent) -> None:
+        if any(event.matches(key) for key in UNDOING):
+            event.ignore()
+            return
+        super().keyPressEvent(event)
+
+    def contextMenuEvent(self, event: QContextMenuEvent) -> None:
+        menu = self.createStandardContextMenu()
+        for action in menu.actions():
+            if action.objectName() in ("edit-undo", "edit-redo"):
+                menu.removeAction(action)
+        if menu.actions() and menu.actions()[0].isSeparator():
+            menu.removeAction(menu.actions()[0])
+        menu.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose)
+        menu.popup(event.globalPos())
+
+    def focusOutEvent(self, event: QFocusEvent) -> None:
+        super().focusOutEvent(event)
+        if event.reason() != Qt.FocusReason.PopupFocusReason:
+            self.left.emit(self.field)
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        super().paintEvent(event)
+        painter = QPainter(self)
+        draw_underline(self, painter, self._look, self.marked)
+        painter.end()
+
+    def _on_text_edited(self, text: str) -> None:
+        self.edited.emit(self.field, text)
+
+    def _on_look_changed(self) -> None:
+        self.setFont(self._look.font(self._role))
+        self.updateGeometry()
+
+
+class ChoiceField(QComboBox):
+    """A choice among a few, shown as its value with a small triangle over a hairline.
+
+    **Signals**
+        chosen: a person chose. Carries the key of the choice.
+    """
+
+    chosen = Signal(str)
+
+    def __init__(
+        self, look: Look, name: str, choices: Sequence[tuple[str, str]], prefix: str = "", plain: bool = False
+    ) -> None:
+        super().__init__()
+        self._look = look
+        self._prefix = prefix
+        self._plain = plain
+        for key, text in choices:
+            self.addItem(text, key)
+        self.setAccessibleName(name)
+        self.setMinimumWidth(0)
+        self.setSizeAdjustPolicy(QComboBox.SizeAdjustPolicy.AdjustToMinimumContentsLengthWithIcon)
+        fixed = QSizePolicy.Policy.Fixed
+        self.setSizePolicy(fixed if plain else QSizePolicy.Policy.Expanding, fixed)
+        self.activated.connect(self._on_activated)
+        look.changed.connect(self._on_look_changed)
+        self._on_look_changed()
+
+    def show_choice(self, key: str) -> None:
+        """Show the choice with this key."""
+        index = self.findData(key)
+        if index != self.currentIndex():
+            self.setCurrentIndex(index)
+
+    def show_words(self, words: dict[str, str]) -> None:
+        """Give some of the choices other words."""
+        for key, text in words.items():
+            index = self.findData(key)
+            if self.itemText(index) != text:
+                self.setItemText(index, text)
+
+    def wheelEvent(self, event: QEvent) -> None:
+        """Leave the wheel to the page: a choice must not change because somebody scrolled over it."""
+        event.ignore()
+
+    def sizeHint(self) -> QSize:
+        widest = max((self.fontMetrics().horizontalAdvance(self.itemText(i)) for i in range(self.count())), default=0)
+        shown = self.fontMetrics().horizontalAdvance(self._prefix + self.currentText())
+        return QSize((shown if self._plain else widest) + self._look.px(24), self._look.px(30))
+
+    def minimumSizeHint(self) -> QSize:
+        return self.sizeHint() if self._plain else QSize(self._look.px(56), self._look.px(30))
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        painter = QPainter(self)
+        option = QStyleOptionComboBox()
+        self.initStyleOption(option)
+        mouse_over = bool(option.state & QStyle.StateFlag.State_MouseOver)
+        mark = self._look.px(16)
+        text_area = self.rect().adjusted(0 if self._plain else 2, 0, -mark, 0)
+        quiet = self._plain and not (mouse_over or self.hasFocus())
+        painter.setFont(self.font())
+        painter.setPen(QPen(self._look.colour("muted" if quiet else "ink")))
+        words = self.fontMetrics().elidedText(
+            self._prefix + self.currentText(), Qt.TextElideMode.ElideRight, text_area.width()
+        )
+        painter.drawText(text_area, Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter, words)
+        painter.drawText(self.rect(), Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter, "▾")
+        if not self._plain or self.hasFocus():
+            draw_underline(self, painter, self._look)
+        painter.end()
+
+    def _on_activated(self, index: int) -> None:
+        self.chosen.emit(self.itemData(index))
+        self.updateGeometry()
+
+    def _on_look_changed(self) -> None:
+        self.setFont(self._look.font("body"))
+        self.updateGeometry()

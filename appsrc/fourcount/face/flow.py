@@ -1,0 +1,70 @@
+"""A layout that sets its items in a line and goes on in the next where the line is full."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import QPoint, QRect, QSize, Qt
+from PySide6.QtWidgets import QLayout, QLayoutItem, QWidget
+
+from fourcount.face.look import Look
+
+
+class FlowLayout(QLayout):
+    """Items from the left, wrapped like words, with a gap that grows with the text."""
+
+    def __init__(self, look: Look, parent: QWidget | None = None, gap: int = 16) -> None:
+        super().__init__(parent)
+        self._look = look
+        self._gap = gap
+        self._items: list[QLayoutItem] = []
+        self.setContentsMargins(0, 0, 0, 0)
+
+    def addItem(self, item: QLayoutItem) -> None:
+        self._items.append(item)
+
+    def count(self) -> int:
+        return len(self._items)
+
+    def itemAt(self, index: int) -> QLayoutItem | None:
+        return self._items[index] if 0 <= index < len(self._items) else None
+
+    def takeAt(self, index: int) -> QLayoutItem | None:
+        return self._items.pop(index) if 0 <= index < len(self._items) else None
+
+    def expandingDirections(self) -> Qt.Orientation:
+        return Qt.Orientation(0)
+
+    def hasHeightForWidth(self) -> bool:
+        return True
+
+    def heightForWidth(self, width: int) -> int:
+        return self._flow(QRect(0, 0, width, 0), place=False)
+
+    def setGeometry(self, rect: QRect) -> None:
+        super().setGeometry(rect)
+        self._flow(rect, place=True)
+
+    def sizeHint(self) -> QSize:
+        return self.minimumSize()
+
+    def minimumSize(self) -> QSize:
+        size = QSize()
+        for item in self._items:
+            size = size.expandedTo(item.minimumSize())
+        return size
+
+    def _flow(self, rect: QRect, place: bool) -> int:
+        """Lay the items out in ``rect`` and give the height that they take."""
+        gap = self._look.px(self._gap)
+        x, y, line = rect.x(), rect.y(), 0
+        for item in self._items:
+            if item.isEmpty():
+                continue
+            size = item.sizeHint()
+            width = min(size.width(), rect.width())
+            if x > rect.x() and x + width > rect.right() + 1:
+                x, y, line = rect.x(), y + line, 0
+            if place:
+                item.setGeometry(QRect(QPoint(x, y), QSize(width, size.height())))
+            x += width + gap
+            line = max(line, size.height())
+        return y + line - rect.y()

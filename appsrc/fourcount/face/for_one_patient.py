@@ -1,0 +1,175 @@
+"""The third column: the effect at one patient's starting risk, and the picture of it."""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import QSize, Qt, Signal
+from PySide6.QtGui import QPainter, QPaintEvent
+from PySide6.QtWidgets import QGridLayout, QSizePolicy, QVBoxLayout, QWidget
+
+from fourcount.face.fields import ChoiceField, TextField
+from fourcount.face.flow import FlowLayout
+from fourcount.face.links import Link
+from fourcount.face.look import Look
+from fourcount.face.text import Words
+from fourcount.record.outcome import Outcome
+from fourcount.wording import labels
+
+if TYPE_CHECKING:
+    from PySide6.QtGui import QAction
+
+    from fourcount.appraisal.findings import OutcomeFindings
+    from fourcount.ink.picture import Picture
+
+
+class PictureView(QWidget):
+    """The picture as one object: painted, and described in a full sentence."""
+
+    def __init__(self, look: Look) -> None:
+        super().__init__()
+        self._look = look
+        self.picture: Picture | None = None
+        policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
+        policy.setHeightForWidth(True)
+        self.setSizePolicy(policy)
+        self.hide()
+        look.changed.connect(self._on_look_changed)
+
+    def show_picture(self, picture: Picture | None, sentence: str) -> None:
+        """Show a picture, or nothing."""
+        before = self.heightForWidth(self.width())
+        self.picture = picture
+        self.setAccessibleName(labels.COLUMNS["patient"])
+        self.setAccessibleDescription(sentence)
+        self.setVisible(picture is not None)
+        if self.heightForWidth(self.width()) != before:
+            self.updateGeometry()
+        self.update()
+
+    def hasHeightForWidth(self) -> bool:
+        return True
+
+    def heightForWidth(self, width: int) -> int:
+        return self.picture.height(self._look, width) if self.picture else 0
+
+    def sizeHint(self) -> QSize:
+        return QSize(self._look.px(280), self.heightForWidth(max(self.width(), self._look.px(200))))
+
+    def minimumSizeHint(self) -> QSize:
+        return QSize(0, self.heightForWidth(self.width()))
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        if self.picture:
+            painter = QPainter(self)
+            self.picture.draw(painter, self._look, 0, 0, self.width())
+            painter.end()
+
+    def _on_look_changed(self) -> None:
+        self.updateGeometry()
+        self.update()
+
+
+class ForOnePatient(QWidget):
+    """Starting risk, the effect that is carried to it, the picture, and what it comes to.
+
+    **Signals**
+        edited: a person changed a text. Carries the field and the text.
+        left: a field lost focus. Carries the field.
+        effect_chosen: the effect to carry was chosen. Carries its key.
+    """
+
+    edited = Signal(str, str)
+    left = Signal(str)
+    effect_chosen = Signal(str)
+
+    def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
+        super().__init__()
+        self._look = look
+        self._bars = False
+        self._shown: tuple[Outcome, OutcomeFindings] | None = None
+        self.baseline = TextField(look, "starting_risk_text", labels.FIELDS["starting_risk_text"])
+        self.source = TextField(
+            look,
+            "starting_risk_source_text",
+            labels.FIELDS["starting_risk_source_text"],
+            labels.HINTS["starting_risk_source_text"],
+        )
+        self.effect = ChoiceField(look, labels.FIELDS["effect"], tuple(labels.EFFECTS.items()))
+        self.mark = Words(look, "small", "caution")
+        self.waits = Words(look, "body", "muted", labels.PATIENT_WAITS)
+        self.picture = PictureView(look)
+        self.summary = Words(look, "strong", selectable=True)
+        self.detail = Words(look, "body", "muted", selectable=True)
+        self.copy = Link(look, labels.LINK_WORDS["copy-picture"], actions["copy-picture"])
+        self._build()
+        self._connect_all()
+
+    def show_state(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
+        """Show the patient's fields; with findings, the picture and its sentences."""
+        self.baseline.show_text(outcome.patient.starting_risk_text)
+        self.source.show_text(outcome.patient.starting_risk_source_text)
+        self.effect.show_choice(outcome.patient.effect)
+        self._shown = (outcome, findings) if findings else None
+        if findings is None:
+            self.baseline.setPlaceholderText(labels.BASELINE_HINT_EMPTY)
+            return
+        self._show_findings(outcome, findings)
+
+    def set_bars(self, bars: bool) -> None:
+        """Draw a bar pair instead of people, or people again."""
+        self._bars = bars
+        if self._shown:
+            self._show_findings(*self._shown)
+
+    def _show_findings(self, outcome: Outcome, findings: OutcomeFindings) -> None:
+        from fourcount.face.patient_view import patient_view
+
+        view = patient_view(outcome, findings, self._bars)
+        self.baseline.setPlaceholderText(view.baseline_hint)
+        self.effect.show_words(view.effect_words)
+        self.effect.setEnabled(view.effect_is_free)
+        self.baseline.show_mark(view.mark)
+        self.mark.show_words(view.mark)
+        self.waits.show_words(view.waits)
+        self.picture.show_picture(view.picture, view.sentence)
+        self.summary.show_words(view.summary)
+        self.detail.show_words(view.detail)
+        self.copy.setVisible(view.picture is not None)
+
+    def _build(self) -> None:
+        self._fields = QGridLayout()
+        self._fields.setContentsMargins(0, 0, 0, 0)
+        self._fields.setColumnStretch(1, 4)
+        self._fields.setColumnStretch(2, 7)
+        names = ("starting_risk_text", "effect")
+        for row, name in enumerate(names):
+            self._fields.addWidget(Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False), row, 0)
+        self._fields.addWidget(self.baseline, 0, 1)
+        self._fields.addWidget(self.source, 0, 2)
+        self._fields.addWidget(self.effect, 1, 1, 1, 2)
+        copies = FlowLayout(self._look)
+        copies.addWidget(self.copy)
+        self._column = QVBoxLayout(self)
+        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["patient"].upper(), wraps=False))
+        self._column.addLayout(self._fields)
+        for widget in (self.mark, self.waits, self.picture, self.summary, self.detail):
+            self._column.addWidget(widget)
+        self._column.addLayout(copies)
+        self._column.addStretch(1)
+        self.copy.hide()
+        self._on_look_changed()
+
+    def _connect_all(self) -> None:
+        for field in (self.baseline, self.source):
+            field.edited.connect(self.edited)
+            field.left.connect(self.left)
+        self.effect.chosen.connect(self.effect_chosen)
+        self._look.changed.connect(self._on_look_changed)
+
+    def _on_look_changed(self) -> None:
+        px = self._look.px
+        self._column.setContentsMargins(px(24), px(20), px(24), px(16))
+        self._column.setSpacing(px(12))
+        self._fields.setHorizontalSpacing(px(12))
+        self._fields.setVerticalSpacing(px(4))

@@ -1,0 +1,105 @@
+"""The line under the menus: the paper's title, where its numbers stand, and short notices."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import Signal
+from PySide6.QtGui import QPainter, QPaintEvent
+from PySide6.QtWidgets import QHBoxLayout, QSizePolicy, QWidget
+
+from fourcount.face.fields import TextField
+from fourcount.face.links import Link
+from fourcount.face.look import Look
+from fourcount.face.text import Words
+from fourcount.record.paper import Record
+from fourcount.wording import labels
+
+
+class QuietField(TextField):
+    """A field without an edge until it has the focus or the mouse, for a line that reads as a heading."""
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        if self.hasFocus() or self.underMouse() or not self.text():
+            super().paintEvent(event)
+        else:
+            super(TextField, self).paintEvent(event)
+
+
+class Header(QWidget):
+    """Title and source, and at the right a notice of what was just done.
+
+    **Signals**
+        edited: a person changed a text. Carries the field and the text.
+        left: a field lost focus. Carries the field.
+    """
+
+    edited = Signal(str, str)
+    left = Signal(str)
+
+    def __init__(self, look: Look) -> None:
+        super().__init__()
+        self._look = look
+        self.title = QuietField(
+            look, "title_text", labels.FIELDS["title_text"], labels.HINTS["title_text"], role="strong"
+        )
+        self.source = QuietField(look, "source_text", labels.FIELDS["source_text"], labels.HINTS["source_text"])
+        self.notice = Words(look, "body", "muted", wraps=False)
+        self._row = QHBoxLayout(self)
+        self._row.addWidget(self.title, 5)
+        self._row.addWidget(self.source, 5)
+        self._row.addStretch(1)
+        self._row.addWidget(self.notice)
+        self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
+        for field in (self.title, self.source):
+            field.edited.connect(self.edited)
+            field.left.connect(self.left)
+        look.changed.connect(self._on_look_changed)
+        self._on_look_changed()
+
+    def show_state(self, record: Record) -> None:
+        """Show the paper's own texts."""
+        self.title.show_text(record.title_text)
+        self.source.show_text(record.source_text)
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        painter = QPainter(self)
+        painter.fillRect(0, 0, self.width(), 1, self._look.colour("hairline"))
+        painter.fillRect(0, self.height() - 1, self.width(), 1, self._look.colour("hairline"))
+        painter.end()
+
+    def _on_look_changed(self) -> None:
+        px = self._look.px
+        self._row.setContentsMargins(px(24), px(5), px(24), px(5))
+        self._row.setSpacing(px(16))
+
+
+class Banner(QWidget):
+    """One sentence about something unexpected, until it is dismissed."""
+
+    def __init__(self, look: Look) -> None:
+        super().__init__()
+        self._look = look
+        self.words = Words(look, selectable=True)
+        self.dismiss = Link(look, labels.DISMISS)
+        self._row = QHBoxLayout(self)
+        self._row.addWidget(self.words, 1)
+        self._row.addWidget(self.dismiss)
+        self.dismiss.clicked.connect(self.hide)
+        self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
+        look.changed.connect(self._on_look_changed)
+        self._on_look_changed()
+        self.hide()
+
+    def tell(self, sentence: str) -> None:
+        """Show a sentence."""
+        self.words.show_words(sentence)
+        self.show()
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        painter = QPainter(self)
+        painter.fillRect(self.rect(), self._look.colour("tint"))
+        painter.fillRect(0, 0, 4, self.height(), self._look.colour("caution"))
+        painter.end()
+
+    def _on_look_changed(self) -> None:
+        px = self._look.px
+        self._row.setContentsMargins(px(24), px(8), px(24), px(8))

@@ -1,0 +1,94 @@
+"""What must not hold up typing: loading the numerical libraries, and figures that take longer than a frame."""
+
+from __future__ import annotations
+
+import threading
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import QObject, Qt, Signal
+
+if TYPE_CHECKING:
+    from fourcount.appraisal.findings import OutcomeFindings
+    from fourcount.record.outcome import Outcome
+    from fourcount.record.paper import Choices
+
+
+class Later(QObject):
+    """One worker thread at a time; of several requests only the newest is computed.
+
+    **Signals**
+        arrived: figures are there. Carries the outcome, the choices and the findings they belong to.
+        loaded: the numerical libraries are loaded.
+        failed: computing raised an error. Carries the error.
+    """
+
+    arrived = Signal(object, object, object)
+    loaded = Signal()
+    failed = Signal(object)
+
+    def __init__(self, parent: QObject | None = None) -> None:
+        super().__init__(parent)
+        self._wanted: tuple[Outcome, Choices] | None = None
+        self._lock = threading.Lock()
+        self._busy = False
+        self._closed = False
+        self.failed.connect(self._on_failed, Qt.ConnectionType.QueuedConnection)
+
+    def load(self) -> None:
+        """Load numpy and scipy.special; an import-only thread."""
+        self._start(self._load)
+
+    def ask(self, outcome: Outcome, choices: Choices) -> None:
+        """Compute all figures of an outcome, however long they take."""
+        with self._lock:
+            self._wanted = (outcome, choices)
+            if self._busy:
+                return
+            self._busy = True
+        self._start(self._compute)
+
+    def close(self) -> None:
+        """Answer nothing any more."""
+        with self._lock:
+            self._closed = True
+            self._wanted = None
+
+    def _start(self, work: object) -> None:
+        threading.Thread(target=work, daemon=True, name="fourcount-later").start()
+
+    def _load(self) -> None:
+        try:
+            import numpy
+            import scipy.special
+
+            assert numpy.__name__ and scipy.special.__name__
+            self._tell(self.loaded)
+        except Exception as error:  # whatever it is, the window's thread reports it
+            self._tell(self.failed, error)
+
+    def _compute(self) -> None:
+        from fourcount.appraisal.appraise import appraise
+
+        while True:
+            with self._lock:
+                wanted, self._wanted = self._wanted, None
+                if wanted is None:
+                    self._busy = False
+                    return
+            try:
+                self._tell(self.arrived, *wanted, appraise(*wanted))
+            except Exception as error:  # whatever it is, the window's thread reports it
+                self._tell(self.failed, error)
+
+    def _tell(self, signal: object, *values: object) -> None:
+        """Emit unless the window is gone."""
+        with self._lock:
+            closed = self._closed
+        if not closed:
+            try:
+                signal.emit(*values)  # type: ignore[attr-defined]
+            except RuntimeError:  # the window was closed between the question and the answer
+                pass
+
+    def _on_failed(self, error: BaseException) -> None:
+        raise error

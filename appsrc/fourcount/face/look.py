@@ -1,0 +1,137 @@
+"""How everything looks at this moment: the palette in use, the size of text, and the fonts by role."""
+
+from __future__ import annotations
+
+from typing import Literal
+
+from PySide6.QtCore import QObject, Qt, Signal
+from PySide6.QtGui import QColor, QFont, QFontInfo, QGuiApplication, QPalette
+
+from fourcount.ink.palette import DARK, LIGHT, Palette
+
+Role = Literal["body", "small", "head", "sentence", "cell", "estimate", "figure", "strong", "total"]
+
+SIZES: dict[Role, int] = {
+    "body": 13,
+    "small": 12,
+    "head": 11,
+    "sentence": 18,
+    "cell": 19,
+    "estimate": 17,
+    "figure": 20,
+    "strong": 13,
+    "total": 15,
+}
+"""Text sizes in pixels at 100%."""
+
+SEMIBOLD: tuple[Role, ...] = ("head", "estimate", "figure", "strong")
+ZOOMS = (0.8, 0.9, 1.0, 1.1, 1.25, 1.5, 1.75, 2.0)
+"""The steps of the text size."""
+
+APPEARANCES = ("system", "light", "dark")
+
+
+class Look(QObject):
+    """The palette and the text size, shared by every widget of the window.
+
+    **Signals**
+        changed: the palette or the text size is another one; repaint, and measure again.
+    """
+
+    changed = Signal()
+
+    def __init__(self, zoom: float = 1.0, appearance: str = "system", parent: QObject | None = None) -> None:
+        super().__init__(parent)
+        self.zoom = zoom
+        self.appearance = appearance
+        self.palette: Palette = LIGHT
+        self._fonts: dict[Role, QFont] = {}
+        self._text_palettes: dict[str, QPalette] = {}
+        hints = QGuiApplication.styleHints()
+        if appearance != "system":
+            self.set_appearance(appearance)
+        self._take_scheme()
+        hints.colorSchemeChanged.connect(self._on_scheme_changed)
+
+    def px(self, pixels: float) -> int:
+        """A length that grows with the text, in logical pixels."""
+        return round(pixels * self.zoom)
+
+    def colour(self, part: str) -> QColor:
+        """The colour of a part of the palette, by its field name."""
+        return QColor(getattr(self.palette, part))
+
+    def font(self, role: Role) -> QFont:
+        """The system's font in the size and weight of a role, with figures that stand in columns."""
+        if role not in self._fonts:
+            font = QFont(QGuiApplication.font())
+            font.setPixelSize(max(round(SIZES[role] * self.zoom), 8))
+            font.setWeight(QFont.Weight.DemiBold if role in SEMIBOLD else QFont.Weight.Normal)
+            font.setFeature(QFont.Tag("tnum"), 1)
+            if role == "head":
+                font.setLetterSpacing(QFont.SpacingType.AbsoluteSpacing, 1.1 * self.zoom)
+            self._fonts[role] = font
+        return self._fonts[role]
+
+    def qt_palette(self) -> QPalette:
+        """The palette as Qt's own widgets (menus, scroll bars, dialogs) take it."""
+        result = QPalette()
+        roles = QPalette.ColorRole
+        parts = {
+            roles.Window: "page", roles.Base: "page", roles.AlternateBase: "tint", roles.Button: "page",
+            roles.ToolTipBase: "tint", roles.WindowText: "ink", roles.Text: "ink", roles.ButtonText: "ink",
+            roles.ToolTipText: "ink", roles.PlaceholderText: "muted", roles.Highlight: "accent",
+            roles.HighlightedText: "on_accent", roles.Link: "accent", roles.LinkVisited: "accent",
+            roles.Mid: "hairline", roles.Midlight: "hairline", roles.Light: "page", roles.Dark: "outline",
+            roles.Shadow: "hairline",
+        }  # fmt: skip
+        for role, part in parts.items():
+            result.setColor(role, self.colour(part))
+        disabled = QPalette.ColorGroup.Disabled
+        for role in (roles.WindowText, roles.Text, roles.ButtonText):
+            result.setColor(disabled, role, self.colour("muted"))
+        return result
+
+    def text_palette(self, part: str) -> QPalette:
+        """Qt's palette with plain text in one colour of ours."""
+        if part not in self._text_palettes:
+            palette = self.qt_palette()
+            palette.setColor(QPalette.ColorRole.WindowText, self.colour(part))
+            self._text_palettes[part] = palette
+        return self._text_palettes[part]
+
+    def set_zoom(self, zoom: float) -> None:
+        """Take another text size, as a factor from 0.8 to 2."""
+        if zoom != self.zoom:
+            self.zoom = zoom
+            self._fonts.clear()
+            self.changed.emit()
+
+    def step_zoom(self, direction: int) -> None:
+        """Go one step up or down in the text sizes, staying inside them."""
+        nearest = min(range(len(ZOOMS)), key=lambda i: abs(ZOOMS[i] - self.zoom))
+        self.set_zoom(ZOOMS[min(max(nearest + direction, 0), len(ZOOMS) - 1)])
+
+    def set_appearance(self, appearance: str) -> None:
+        """Follow the system, or stay light or dark."""
+        self.appearance = appearance
+        scheme = {"light": Qt.ColorScheme.Light, "dark": Qt.ColorScheme.Dark}
+        QGuiApplication.styleHints().setColorScheme(scheme.get(appearance, Qt.ColorScheme.Unknown))
+        self._on_scheme_changed()
+
+    def _on_scheme_changed(self) -> None:
+        before = self.palette
+        self._take_scheme()
+        if self.palette is not before:
+            self.changed.emit()
+
+    def _take_scheme(self) -> None:
+        system_is_dark = QGuiApplication.styleHints().colorScheme() == Qt.ColorScheme.Dark
+        dark = self.appearance == "dark" or (self.appearance == "system" and system_is_dark)
+        self.palette = DARK if dark else LIGHT
+        self._text_palettes.clear()
+
+
+def family_in_use() -> str:
+    """The name of the font family that the system gave."""
+    return QFontInfo(QGuiApplication.font()).family()

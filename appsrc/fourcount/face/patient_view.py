@@ -1,0 +1,102 @@
+"""What the third column shows for some findings: the picture, its words, and what is still missing."""
+
+from __future__ import annotations
+
+from typing import NamedTuple
+
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
+from fourcount.ink.picture import KeyEntry, Picture, PictureWords, Side
+from fourcount.picture.plan import Plan, plan
+from fourcount.record.outcome import Outcome
+from fourcount.wording import labels, numbers
+from fourcount.wording.gaps import gap_text, mark_text
+from fourcount.wording.patient import PatientWords, patient_words
+
+
+class PatientView(NamedTuple):
+    """Everything that the column shows."""
+
+    baseline_hint: str
+    effect_words: dict[str, str]
+    effect_is_free: bool
+    mark: str = ""
+    waits: str = ""
+    picture: Picture | None = None
+    sentence: str = ""
+    summary: str = ""
+    detail: str = ""
+
+
+def patient_view(outcome: Outcome, findings: OutcomeFindings, bars: bool) -> PatientView:
+    """The column for an outcome and its findings; ``bars`` asks for bars instead of people."""
+    marks = {mark.field: mark_text(mark) for mark in findings.marks}
+    view = PatientView(
+        baseline_hint=_baseline_hint(outcome, findings),
+        effect_words=_effect_words(findings),
+        effect_is_free=outcome.design != "case-control",
+        mark=marks.get("starting_risk_text", ""),
+    )
+    if isinstance(findings.counts, Gap):
+        return view._replace(waits=labels.PATIENT_WAITS)
+    if isinstance(findings.patient, Gap):
+        return view if view.mark else view._replace(waits=gap_text(findings.patient))
+    return _with_patient(view, outcome, findings, findings.patient, bars)
+
+
+def _with_patient(
+    view: PatientView, outcome: Outcome, findings: OutcomeFindings, patient: PatientFindings, bars: bool
+) -> PatientView:
+    drawn = _plan(patient)
+    words = patient_words(outcome, findings, drawn.denominator if drawn else None)
+    missing = labels.MISSING.format(names=", ".join(words.missing)) if words.missing else ""
+    lines = (f"{words.summary_bold} {words.summary}".strip(), words.detail)
+    picture = Picture(drawn, _picture_words(words, lines), bars) if drawn else None
+    return view._replace(
+        picture=picture,
+        sentence=words.picture_sentence,
+        summary=lines[0],
+        detail="\n".join(part for part in (words.detail, missing) if part),
+    )
+
+
+def _plan(patient: PatientFindings) -> Plan | None:
+    without, with_ = patient.without.estimate, patient.with_.estimate
+    if isinstance(without, Gap) or isinstance(with_, Gap):
+        return None
+    return plan(without, with_)
+
+
+def _picture_words(words: PatientWords, lines: tuple[str, ...]) -> PictureWords:
+    entries = (
+        KeyEntry("affected", words.key_event),
+        KeyEntry("avoided", words.key_avoided),
+        KeyEntry("added", words.key_added),
+        KeyEntry("others", words.key_other),
+    )
+    return PictureWords(
+        without=Side(words.without_title, words.without_count, f"({words.without_percent})", words.without_other),
+        with_=Side(words.with_title, words.with_count, f"({words.with_percent})", words.with_other),
+        key=tuple(entry for entry in entries if entry.text),
+        note=words.scale,
+        lines=tuple(line for line in lines if line),
+    )
+
+
+def _baseline_hint(outcome: Outcome, findings: OutcomeFindings) -> str:
+    if outcome.design == "case-control":
+        return labels.BASELINE_HINT_NEEDED
+    risk = findings.measures["risk_reference"]
+    if isinstance(risk, Figure) and not isinstance(risk.estimate, Gap):
+        return labels.BASELINE_HINT.format(percent=numbers.percent(risk.estimate))
+    return labels.BASELINE_HINT_EMPTY
+
+
+def _effect_words(findings: OutcomeFindings) -> dict[str, str]:
+    """The choices of effect with the study's own estimates in them."""
+    result = {}
+    for key, name in labels.EFFECTS.items():
+        figure = findings.measures[key]
+        known = isinstance(figure, Figure) and not isinstance(figure.estimate, Gap)
+        value = numbers.ratio(figure.estimate) if known else ""
+        result[key] = labels.EFFECT_KEPT.format(effect=name, value=value) if value else name
+    return result

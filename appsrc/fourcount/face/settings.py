@@ -1,0 +1,61 @@
+"""What the window remembers between starts: its size, the text size, light or dark. Nothing of any record."""
+
+from __future__ import annotations
+
+import os
+from pathlib import Path
+
+from PySide6.QtCore import QByteArray, QSettings, QStandardPaths
+
+FOLDER_VARIABLE = "FOURCOUNT_SETTINGS_FOLDER"
+"""An environment variable that names another folder for settings and log."""
+
+
+def own_folder() -> Path:
+    """The folder for settings and the log of errors, made if it is not there."""
+    location = QStandardPaths.writableLocation(QStandardPaths.StandardLocation.GenericConfigLocation)
+    folder = Path(os.environ.get(FOLDER_VARIABLE) or Path(location) / "fourcount")
+    return folder
+
+
+class Settings:
+    """An ini file in a folder; a folder that cannot be written is no trouble, things are just not remembered."""
+
+    def __init__(self, folder: Path) -> None:
+        self.folder = folder
+        self._store = QSettings(str(folder / "window.ini"), QSettings.Format.IniFormat)
+
+    def zoom(self) -> float:
+        """The text size as a factor, 0.8 to 2; 1 where it is not a number in that range."""
+        try:
+            zoom = float(str(self._store.value("zoom", 1.0)))
+        except ValueError:
+            return 1.0
+        return zoom if 0.8 <= zoom <= 2.0 else 1.0
+
+    def appearance(self) -> str:
+        """"system", "light" or "dark"."""
+        value = str(self._store.value("appearance", "system"))
+        return value if value in ("system", "light", "dark") else "system"
+
+    def geometry(self) -> QByteArray:
+        """The window's place and size as Qt saved them; empty at the first start."""
+        value = self._store.value("geometry", QByteArray())
+        return value if isinstance(value, QByteArray) else QByteArray()
+
+    def choices(self) -> tuple[str, float]:
+        """The family and level that a new record starts with."""
+        family = str(self._store.value("family", "score"))
+        try:
+            level = float(str(self._store.value("level", 0.95)))
+        except ValueError:
+            level = 0.95
+        return (family if family in ("score", "textbook", "exact") else "score"), (
+            level if 0.8 <= level <= 0.999 else 0.95
+        )
+
+    def keep(self, **values: object) -> None:
+        """Remember values by name."""
+        for key, value in values.items():
+            self._store.setValue(key, value)
+        self._store.sync()

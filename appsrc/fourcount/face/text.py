@@ -1,0 +1,50 @@
+"""Text that is only read: plain words in a role, a colour and, where needed, several lines."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import QSize, Qt
+from PySide6.QtWidgets import QLabel, QSizePolicy
+
+from fourcount.face.look import Look, Role
+
+
+class Words(QLabel):
+    """A piece of plain text. Whatever it holds is shown as it is, never as markup."""
+
+    def __init__(
+        self, look: Look, role: Role = "body", part: str = "ink", text: str = "", wraps: bool = True, selectable: bool = False
+    ) -> None:
+        super().__init__()
+        self._look = look
+        self._role: Role = role
+        self._part = part
+        self.setTextFormat(Qt.TextFormat.PlainText)
+        self.setWordWrap(wraps)
+        self.setMinimumWidth(0)
+        if wraps:
+            policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
+            policy.setHeightForWidth(True)
+            self.setSizePolicy(policy)
+        if selectable:
+            flags = Qt.TextInteractionFlag
+            self.setTextInteractionFlags(flags.TextSelectableByMouse | flags.TextSelectableByKeyboard)
+        self.show_words(text)
+        look.changed.connect(self._on_look_changed)
+        self._on_look_changed()
+
+    def show_words(self, text: str) -> None:
+        """Show a text; an empty one takes no room."""
+        if text != self.text():
+            self.setText(text)
+        if not text:
+            self.hide()
+        elif self.isHidden() and self.parent() is not None:
+            self.show()
+
+    def minimumSizeHint(self) -> QSize:
+        hint = super().minimumSizeHint()
+        return QSize(0, hint.height()) if self.wordWrap() else hint
+
+    def _on_look_changed(self) -> None:
+        self.setFont(self._look.font(self._role))
+        self.setPalette(self._look.text_palette(self._part))

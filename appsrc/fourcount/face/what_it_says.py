@@ -1,0 +1,213 @@
+"""The second column: a sentence, the measures with their intervals and strips, and how they are computed."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import Signal
+from PySide6.QtWidgets import QHBoxLayout, QVBoxLayout, QWidget
+
+from fourcount.face.fields import ChoiceField
+from fourcount.face.flow import FlowLayout
+from fourcount.face.links import Link
+from fourcount.face.look import Look
+from fourcount.face.text import Words
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices, Record
+from fourcount.wording import labels
+
+if TYPE_CHECKING:
+    from PySide6.QtGui import QAction
+
+    from fourcount.appraisal.findings import OutcomeFindings
+    from fourcount.face.measure_row import MeasureRow
+    from fourcount.picture.scales import Scale
+    from fourcount.wording.lines import MeasureLine
+
+
+class WhatItSays(QWidget):
+    """Sentence, rows of measures, the choice of family and level.
+
+    **Signals**
+        family_chosen: a family of intervals was chosen. Carries its key.
+        level_chosen: a level was chosen. Carries its fraction as text, or "other".
+    """
+
+    family_chosen = Signal(str)
+    level_chosen = Signal(str)
+
+    def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
+        super().__init__()
+        self._look = look
+        self._rows: dict[str, MeasureRow] = {}
+        self._open = ""
+        self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
+        self._show_more = False
+        self.sentence = Words(look, "sentence", selectable=True)
+        self.p_words = Words(look, "body", "muted", selectable=True)
+        self.working = Words(look, "small", selectable=True)
+        self.working.setContentsMargins(12, 4, 0, 12)
+        self.working.hide()
+        self.family = ChoiceField(
+            look, "Intervals", tuple(labels.FAMILIES.items()), prefix=labels.INTERVALS_PREFIX, plain=True
+        )
+        levels = [(f"{level:g}", f"{100 * level:g}%") for level in labels.LEVELS]
+        self.level = ChoiceField(
+            look, "Confidence level", (*levels, ("other", labels.OTHER_LEVEL)), prefix=labels.LEVEL_PREFIX, plain=True
+        )
+        self.more = Link(look, labels.LINKS["more"], actions["more"])
+        self.help = Link(look, labels.LINKS["help"], actions["methods"])
+        self.copies = [Link(look, labels.LINK_WORDS[key], actions[key]) for key in ("copy-text", "copy-table")]
+        self._build()
+        self._connect_all()
+
+    def show_state(self, record: Record, outcome: Outcome, findings: OutcomeFindings | None) -> None:
+        """Show the sentence and the measures; before the first appraisal, only the empty page."""
+        self._show_choices(record.choices)
+        if findings is None:
+            self._shown = None
+            return
+        from fourcount.wording.sentence import headline, p_sentence
+
+        self._shown = (outcome, findings, record.choices)
+        self.sentence.show_words(headline(outcome, findings, record.choices))
+        self.p_words.show_words(p_sentence(findings))
+        self._show_rows()
+
+    def set_more(self, more: bool) -> None:
+        """Show or hide the measures under the fold."""
+        self._show_more = more
+        self.more.show_words(labels.LINKS["less" if more else "more"])
+        self._show_rows()
+
+    def close_working(self) -> bool:
+        """Hide an open working; whether there was one."""
+        was_open = bool(self._open)
+        self._open = ""
+        self._show_rows()
+        return was_open
+
+    def _show_choices(self, choices: Choices) -> None:
+        self.family.show_choice(choices.family)
+        key = f"{choices.level:g}"
+        if self.level.findData(key) < 0:
+            self.level.insertItem(self.level.count() - 1, f"{100 * choices.level:g}%", key)
+        self.level.show_choice(key)
+
+    def _show_rows(self) -> None:
+        if self._shown is None:
+            return
+        from fourcount.appraisal.findings import Gap
+        from fourcount.wording.lines import measure_lines
+
+        outcome, findings, choices = self._shown
+        untyped = isinstance(findings.counts, Gap)
+        lines = () if untyped else measure_lines(outcome, findings, choices)
+        lines = tuple(line for line in lines if self._show_more or line.group == "main")
+        self._show_lines(lines)
+        for widget in (self.more, *self.copies):
+            widget.setVisible(not untyped)
+
+    def _show_lines(self, lines: Sequence[MeasureLine]) -> None:
+        scales, last = _scales(lines)
+        shown = {line.key for line in lines}
+        for key, row in self._rows.items():
+            if key not in shown:
+                row.hide()
+        for line in lines:
+            row = self._row(line.key)
+            scale = None if line.withheld else scales.get(line.kind)
+            axis = None
+            if scale and last[line.kind] == line.key:
+                from fourcount.wording.axis import axis_words
+
+                axis = axis_words(line.kind, scale.high)
+            row.show_line(line, scale, axis, line.key == self._open)
+            row.show()
+        self._show_working(shown)
+
+    def _row(self, key: str) -> MeasureRow:
+        from fourcount.face.measure_row import MeasureRow
+
+        if key not in self._rows:
+            row = MeasureRow(self._look, key)
+            row.toggled.connect(self._on_row_toggled)
+            self._rows[key] = row
+            self._measures.addWidget(row)
+            self._keep_tab_order()
+        return self._rows[key]
+
+    def _keep_tab_order(self) -> None:
+        rows = list(self._rows.values())
+        before: QWidget = self.p_words
+        for row in rows:
+            QWidget.setTabOrder(before, row)
+            before = row
+        QWidget.setTabOrder(before, self.more)
+
+    def _show_working(self, shown: set[str]) -> None:
+        """Put the working under its row; it is computed only while it is open."""
+        if self._open not in shown or self._shown is None:
+            self.working.hide()
+            return
+        from fourcount.wording.working import working
+
+        outcome, findings, choices = self._shown
+        text = working(self._open, outcome, findings, choices)
+        rows = "\n".join(f"{label}: {value}" if label else value for label, value in text.rows)
+        self._measures.removeWidget(self.working)
+        self._measures.insertWidget(self._measures.indexOf(self._rows[self._open]) + 1, self.working)
+        self.working.show_words(f"{text.sentence}\n\n{rows}")
+
+    def _on_row_toggled(self, key: str) -> None:
+        self._open = "" if self._open == key else key
+        self._show_rows()
+
+    def _build(self) -> None:
+        self._measures = QVBoxLayout()
+        self._measures.setSpacing(0)
+        choosers = FlowLayout(self._look, gap=20)
+        for widget in (self.family, self.level, self.more, self.help):
+            choosers.addWidget(widget)
+        copies = FlowLayout(self._look, gap=20)
+        for link in self.copies:
+            copies.addWidget(link)
+        self._column = QVBoxLayout(self)
+        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["says"].upper(), wraps=False))
+        self._column.addWidget(self.sentence)
+        self._column.addWidget(self.p_words)
+        self._column.addLayout(self._measures)
+        self._column.addLayout(choosers)
+        self._column.addLayout(copies)
+        self._column.addStretch(1)
+        self.p_words.hide()
+        for widget in (self.more, *self.copies):
+            widget.hide()
+        self._on_look_changed()
+
+    def _connect_all(self) -> None:
+        self.family.chosen.connect(self.family_chosen)
+        self.level.chosen.connect(self.level_chosen)
+        self._look.changed.connect(self._on_look_changed)
+
+    def _on_look_changed(self) -> None:
+        px = self._look.px
+        self._column.setContentsMargins(px(24), px(20), px(24), px(16))
+        self._column.setSpacing(px(12))
+
+
+def _scales(lines: Sequence[MeasureLine]) -> tuple[dict[str, Scale], dict[str, str]]:
+    """One scale for each kind of measure, and the key of the last row of the kind, which names its ends."""
+    from fourcount.picture.scales import difference_scale, ratio_scale, risk_scale
+
+    makers = {"risk": risk_scale, "difference": difference_scale, "ratio": ratio_scale}
+    scales: dict[str, Scale] = {}
+    last: dict[str, str] = {}
+    for kind, maker in makers.items():
+        mine = [line for line in lines if line.kind == kind and not line.withheld]
+        values = [v for line in mine for v in (line.estimate_value, line.low, line.high) if v is not None]
+        if values:
+            scales[kind] = maker(values)
+            last[kind] = mine[-1].key
+    return scales, last

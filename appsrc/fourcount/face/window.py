@@ -1,0 +1,348 @@
+"""The window: three columns over a strip of cautions, wired to one session."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import QEvent, QSize, Qt, QTimer, Signal
+from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QKeyEvent, QPaintEvent
+from PySide6.QtWidgets import QApplication, QLineEdit, QMainWindow, QVBoxLayout, QWidget
+
+from fourcount.face import actions as commands_table
+from fourcount.face import commands, dialogs
+from fourcount.face.as_printed import AsPrinted
+from fourcount.face.cautions_strip import CautionsStrip
+from fourcount.face.columns import Page, PageScroll
+from fourcount.face.for_one_patient import ForOnePatient
+from fourcount.face.header import Banner, Header
+from fourcount.face.later import Later
+from fourcount.face.look import APPEARANCES, Look
+from fourcount.face.session import Session
+from fourcount.face.settings import Settings
+from fourcount.face.what_it_says import WhatItSays
+from fourcount.record import editing
+from fourcount.record.outcome import CELLS
+from fourcount.record.paper import Record
+from fourcount.wording import labels
+from fourcount.wording.cautions import STANDING
+
+FIRST_SIZE = QSize(1280, 800)
+SMALLEST_SIZE = QSize(480, 360)
+
+
+class MainWindow(QMainWindow):
+    """Everything on screen; the record itself lives in the session.
+
+    **Signals**
+        first_painted: the first paint is over.
+    """
+
+    first_painted = Signal()
+
+    def __init__(self, session: Session, look: Look, settings: Settings, later: Later) -> None:
+        super().__init__()
+        self.session = session
+        self.look = look
+        self._settings = settings
+        self._later = later
+        self._painted = False
+        self._at_start = session.record
+        self.actions_by_key = commands_table.make_actions(self)
+        self.header = Header(look)
+        self.banner = Banner(look)
+        self.printed = AsPrinted(look, self.actions_by_key)
+        self.says = WhatItSays(look, self.actions_by_key)
+        self.patient = ForOnePatient(look, self.actions_by_key)
+        self.cautions = CautionsStrip(look, STANDING)
+        self._build()
+        self._connect_all()
+        self._show_state(session.record, None)
+        self.printed.grid.cells[CELLS[0]].setFocus()
+
+    def _build(self) -> None:
+        self.setWindowTitle("Fourcount")
+        self.setMinimumSize(SMALLEST_SIZE)
+        self.resize(FIRST_SIZE)
+        self.menus = commands_table.fill_menus(self, self.actions_by_key)
+        self._appearances = self._appearance_actions()
+        inside = QWidget()
+        column = QVBoxLayout(inside)
+        column.setContentsMargins(0, 0, 0, 0)
+        column.setSpacing(0)
+        column.addWidget(self.header)
+        column.addWidget(self.banner)
+        self.page = Page(self.look, self.printed, self.says, self.patient)
+        self.page_scroll = PageScroll(self.look, self.page)
+        column.addWidget(self.page_scroll, 1)
+        column.addWidget(self.cautions)
+        self.setCentralWidget(inside)
+        self._set_tab_order()
+        self._on_look_changed()
+        geometry = self._settings.geometry()
+        if not geometry.isEmpty():
+            self.restoreGeometry(geometry)
+
+    def _appearance_actions(self) -> QActionGroup:
+        group = QActionGroup(self)
+        menu = self.menus["view"]
+        menu.addSeparator()
+        for key in APPEARANCES:
+            action = QAction(labels.APPEARANCES[key], group)
+            action.setCheckable(True)
+            action.setData(key)
+            action.setChecked(key == self.look.appearance)
+            menu.addAction(action)
+        return group
+
+    def _set_tab_order(self) -> None:
+        """Cells in reading order right after the words above them."""
+        grid, printed, says, patient = self.printed.grid, self.printed, self.says, self.patient
+        order: list[QWidget] = [
+            self.header.title, self.header.source, printed.design, printed.event_words, printed.welcome, printed.span,
+            printed.form, printed.layout_choice, grid.headings["left"], grid.headings["right"], grid.labels["first"],
+            grid.labels["second"], *grid.cells.values(), *printed.links, printed.example, says.sentence,
+            says.p_words, says.more, says.family, says.level, says.help, *says.copies, patient.baseline,
+            patient.source, patient.effect, patient.summary, patient.detail, patient.copy,
+        ]  # fmt: skip
+        for before, after in zip(order, order[1:], strict=False):
+            self.setTabOrder(before, after)
+
+    def _connect_all(self) -> None:
+        """All wiring of the window, in one place."""
+        for view in (self.header, self.printed, self.patient):
+            view.edited.connect(self.session.edit_text)
+            view.left.connect(self.session.end_run)
+        self.printed.design.chosen.connect(self._on_design_chosen)
+        self.printed.welcome.chosen.connect(self._on_welcome_chosen)
+        self.printed.form.chosen.connect(self._on_form_chosen)
+        self.printed.layout_choice.chosen.connect(self._on_layout_chosen)
+        self.printed.example_wanted.connect(self._on_example)
+        self.says.family_chosen.connect(self._on_family_chosen)
+        self.says.level_chosen.connect(self._on_level_chosen)
+        self.patient.effect_chosen.connect(self._on_effect_chosen)
+        self.session.changed.connect(self._show_state)
+        self.session.focus_wanted.connect(self._on_focus_wanted)
+        self._later.arrived.connect(self._on_figures_arrived)
+        self._later.loaded.connect(self._on_libraries_loaded)
+        self.look.changed.connect(self._on_look_changed)
+        self.first_painted.connect(self._on_first_painted)
+        self._appearances.triggered.connect(self._on_appearance_chosen)
+        handlers = {
+            "new": self._on_new, "example": self._on_example, "quit": self.close, "undo": self.session.undo,
+            "redo": self.session.redo, "copy-text": self._on_copy_text, "copy-table": self._on_copy_table,
+            "copy-picture": self._on_copy_picture, "swap": self._on_swap, "count-other": self._on_count_other,
+            "form": self._on_form, "layout": self._on_layout, "clear": self._on_clear,
+            "first-cell": self._on_first_cell, "bigger": self._on_bigger, "smaller": self._on_smaller,
+            "actual": self._on_actual, "bars": self._on_bars, "more": self._on_more, "methods": self._on_methods,
+            "keys": self._on_keys, "about": self._on_about,
+        }  # fmt: skip
+        for key, handler in handlers.items():
+            self.actions_by_key[key].triggered.connect(handler)
+
+    # What is shown
+
+    def _show_state(self, record: Record, findings: object) -> None:
+        """Show a record and its findings in every view; ask for what follows later."""
+        from_session = self.session.findings
+        outcome = self.session.outcome
+        self.header.show_state(record)
+        self.header.notice.show_words("")
+        self.printed.show_state(outcome, from_session)
+        self.says.show_state(record, outcome, from_session)
+        self.patient.show_state(outcome, from_session)
+        self.cautions.show_state(from_session)
+        self.actions_by_key["undo"].setEnabled(self.session.can_undo)
+        self.actions_by_key["redo"].setEnabled(self.session.can_redo)
+        title = record.title_text.strip()
+        self.setWindowTitle(f"{title} · Fourcount" if title else "Fourcount")
+        self._ask_for_the_rest()
+
+    def _ask_for_the_rest(self) -> None:
+        if self.session.findings is not None:
+            from fourcount.appraisal.waiting import waits
+
+            if waits(self.session.findings):
+                self._later.ask(self.session.outcome, self.session.record.choices)
+
+    def tell_unexpected(self, name: str, place: str) -> None:
+        """Say in one sentence that something unexpected happened."""
+        pattern = labels.UNEXPECTED if place else labels.UNEXPECTED_NO_LOG
+        self.banner.tell(pattern.format(name=name, place=place))
+
+    # Qt's own
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        super().paintEvent(event)
+        if not self._painted:
+            self._painted = True
+            QTimer.singleShot(0, self.first_painted.emit)
+
+    def keyPressEvent(self, event: QKeyEvent) -> None:
+        if event.key() == Qt.Key.Key_Escape and self.says.close_working():
+            return
+        super().keyPressEvent(event)
+
+    def resizeEvent(self, event: QEvent) -> None:
+        super().resizeEvent(event)
+        self.cautions.fit()
+
+    def closeEvent(self, event: QCloseEvent) -> None:
+        if self._has_work() and not dialogs.may_discard(self):
+            event.ignore()
+            return
+        record = self.session.record
+        self._settings.keep(
+            geometry=self.saveGeometry(),
+            zoom=self.look.zoom,
+            appearance=self.look.appearance,
+            family=record.choices.family,
+            level=record.choices.level,
+        )
+        self._later.close()
+        super().closeEvent(event)
+
+    def _has_work(self) -> bool:
+        """Whether the window holds typed text that is not just the worked example."""
+        from fourcount.wording.example import worked_example
+
+        outcomes = self.session.record.outcomes
+        return outcomes not in (Record().outcomes, worked_example().outcomes)
+
+    # Slots
+
+    def _on_first_painted(self) -> None:
+        self.session.wake()
+        self._later.load()
+
+    def _on_libraries_loaded(self) -> None:
+        self.session.announce()
+
+    def _on_figures_arrived(self, outcome: object, choices: object, findings: object) -> None:
+        if choices == self.session.record.choices:
+            self.session.take_findings(outcome, findings)
+
+    def _on_focus_wanted(self, field: str) -> None:
+        if field == "choice":
+            return
+        for widget in self.findChildren(QLineEdit):
+            if getattr(widget, "field", "") == field:
+                widget.setFocus(Qt.FocusReason.OtherFocusReason)
+
+    def _on_design_chosen(self, key: str) -> None:
+        self.session.change_outcome(editing.with_design(self.session.outcome, key))
+
+    def _on_welcome_chosen(self, key: str) -> None:
+        self.session.change_outcome(editing.with_welcome(self.session.outcome, key == "welcome"))
+
+    def _on_form_chosen(self, key: str) -> None:
+        commands.choose_form(self.session, key)
+
+    def _on_layout_chosen(self, key: str) -> None:
+        self.session.change_outcome(editing.with_layout(self.session.outcome, key))
+
+    def _on_effect_chosen(self, key: str) -> None:
+        self.session.change_outcome(editing.with_effect(self.session.outcome, key))
+
+    def _on_family_chosen(self, key: str) -> None:
+        self.session.change_record(editing.with_family(self.session.record, key))
+
+    def _on_level_chosen(self, key: str) -> None:
+        if key == "other":
+            self._ask_level()
+        else:
+            self.session.change_record(editing.with_level(self.session.record, float(key)))
+
+    def _ask_level(self) -> None:
+        from fourcount.record.entry.level import read_level
+        from fourcount.record.entry.readings import Proportion, Unreadable
+        from fourcount.wording.gaps import mark_text
+
+        text: str | None = f"{100 * self.session.record.choices.level:g}"
+        problem = ""
+        while True:
+            text = dialogs.ask_level(self, text, problem)
+            if text is None:
+                break
+            reading = read_level(text)
+            if isinstance(reading, Proportion):
+                self.session.change_record(editing.with_level(self.session.record, reading.value))
+                break
+            problem = mark_text(reading) if isinstance(reading, Unreadable) else ""
+        self.session.announce()
+
+    def _on_new(self) -> None:
+        commands.new_table(self.session)
+        self._on_first_cell()
+
+    def _on_example(self) -> None:
+        commands.open_example(self.session)
+        self._on_first_cell()
+
+    def _on_swap(self) -> None:
+        commands.swap_groups(self.session)
+
+    def _on_count_other(self) -> None:
+        commands.count_other_outcome(self.session)
+
+    def _on_clear(self) -> None:
+        commands.clear_counts(self.session)
+        self._on_first_cell()
+
+    def _on_form(self) -> None:
+        commands.change_form(self.session)
+
+    def _on_layout(self) -> None:
+        commands.change_layout(self.session)
+
+    def _on_first_cell(self) -> None:
+        cell = self.printed.grid.cells[CELLS[0]]
+        cell.setFocus(Qt.FocusReason.ShortcutFocusReason)
+        cell.selectAll()
+        self.page_scroll.ensureWidgetVisible(cell)
+
+    def _on_copy_text(self) -> None:
+        self._tell_copied("copy-text", commands.copy_text(self.session))
+
+    def _on_copy_table(self) -> None:
+        self._tell_copied("copy-table", commands.copy_table(self.session))
+
+    def _on_copy_picture(self) -> None:
+        done = commands.copy_picture(self.session, self.patient.picture.picture, self.look)
+        self._tell_copied("copy-picture", done)
+
+    def _tell_copied(self, key: str, done: bool) -> None:
+        self.header.notice.show_words(labels.COPIED[key] if done else labels.NOTHING_TO_COPY)
+
+    def _on_bigger(self) -> None:
+        self.look.step_zoom(1)
+
+    def _on_smaller(self) -> None:
+        self.look.step_zoom(-1)
+
+    def _on_actual(self) -> None:
+        self.look.set_zoom(1.0)
+
+    def _on_bars(self, checked: bool) -> None:
+        self.patient.set_bars(checked)
+
+    def _on_more(self, checked: bool) -> None:
+        self.says.set_more(checked)
+
+    def _on_methods(self) -> None:
+        dialogs.methods_window(self.look, self).show()
+
+    def _on_keys(self) -> None:
+        dialogs.keys_window(self.look, self, commands_table.shortcut_table(self.actions_by_key)).show()
+
+    def _on_about(self) -> None:
+        dialogs.about_window(self.look, self).show()
+
+    def _on_appearance_chosen(self, action: QAction) -> None:
+        self.look.set_appearance(action.data())
+
+    def _on_look_changed(self) -> None:
+        application = QApplication.instance()
+        if isinstance(application, QApplication):
+            application.setPalette(self.look.qt_palette())
+        self.menuBar().setFont(self.look.font("body"))
+        for menu in self.menus.values():
+            menu.setFont(self.look.font("body"))
+        self.update()
