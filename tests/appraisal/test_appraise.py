@@ -12,6 +12,7 @@ from fourcount.appraisal import appraise as module
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded
 from fourcount.appraisal.postponing import NEED_NUMPY, _loaded, postponed
+from fourcount.appraisal.waiting import waits
 from fourcount.record.paper import Choices
 from fourcount.stats.methods import FAMILIES
 from fourcount.stats.results import Counts
@@ -70,6 +71,15 @@ def test_a_slow_figure_follows(study, monkeypatch):
     assert Gap("follows") == findings.measures["odds_ratio"].interval
     assert Gap("follows") == findings.test.p
     assert isinstance(findings.measures["risk_index"].interval, Interval)
+
+
+def test_findings_that_wait_say_so(study, monkeypatch):
+    """Whoever deferred can tell whether to ask again."""
+    monkeypatch.setattr(module, "numbers_loaded", lambda: False)
+    outcome = study(38, 374, 70, 336)
+    assert waits(appraise(outcome, EXACT, deferring=True))
+    assert not waits(appraise(outcome, EXACT))
+    assert not waits(appraise(study("", "", "", ""), EXACT, deferring=True))
 
 
 def test_nothing_follows_unless_asked(study, monkeypatch):

@@ -20,7 +20,8 @@ def converted_figure(odds_ratio: Figure, baseline: float) -> Figure:
     """The figure of the risk ratio that an odds ratio means at a starting risk, by the odds ratio's method."""
 
     def converted(value: float) -> float | Gap:
-        if undetermined(value, baseline):
+        # Where everybody has the event, odds times an odds ratio of 0 are 0 times infinity.
+        if value == 0 and baseline == 1:
             return Gap("undetermined-at-baseline")
         return risk_ratio_from_odds_ratio(value, baseline)
 
@@ -46,8 +47,3 @@ def _mapped_interval(
         return Range(low=low, high=high, adjusted=interval.adjusted)
     # Limits that agree to the last bit or two can come out of the function in the other order.
     return Interval(low=min(low, high), high=max(low, high), adjusted=interval.adjusted)
-
-
-def undetermined(odds_ratio: float, baseline: float) -> bool:
-    """Whether the odds with the treatment would be 0 times infinity: everybody has the event, and the ratio is 0."""
-    return odds_ratio == 0 and baseline == 1

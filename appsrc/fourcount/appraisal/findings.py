@@ -38,7 +38,6 @@ GAP_KEYS = (
     "no-starting-risk",  # nothing typed, and the reference group has nobody
     "baseline-unreadable",  # the typed starting risk gives no risk
     "carried-gap",  # the effect to carry has no value
-    "undetermined-at-baseline",  # an odds ratio of 0 says nothing at a starting risk of 100%
     "bare-starting-risk",  # the starting risk is a bare value without an interval of its own
     "limit-withheld",  # one limit of the difference is withheld, so the number needed has no interval
 )

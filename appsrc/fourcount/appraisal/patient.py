@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.conversion import converted_figure, mapped, undetermined
+from fourcount.appraisal.conversion import converted_figure, mapped
 from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, PatientFindings
 from fourcount.appraisal.gating import Support
 from fourcount.appraisal.measures import Figures, number_needed_from
@@ -57,7 +57,7 @@ def _from_effect(
     baseline = start.value
 
     def risk(value: float) -> float | Gap:
-        return _risk_with(effect, value, baseline)
+        return risk_with(effect, value, baseline)
 
     def above_baseline(risk: float) -> float | Gap:
         return risk - baseline
@@ -82,12 +82,6 @@ def _gated(difference: Figure, support: Support, *, welcome: bool) -> NumberNeed
     if support.patient_number_needed is not None:
         return Gap(support.patient_number_needed)
     return number_needed_from(difference, welcome=welcome)
-
-
-def _risk_with(effect: Effect, value: float, baseline: float) -> float | Gap:
-    if effect == "odds_ratio" and undetermined(value, baseline):
-        return Gap("undetermined-at-baseline")
-    return risk_with(effect, value, baseline)
 
 
 def _as_risk(value: float) -> float | Gap:
