@@ -5,8 +5,6 @@ What is typed wrongly is answered with one sentence on stderr and exit status 2.
 
 from __future__ import annotations
 
-import argparse
-import json
 import os
 import re
 import sys
@@ -16,6 +14,8 @@ from typing import TYPE_CHECKING, NoReturn, TextIO
 from fourcount import __version__
 
 if TYPE_CHECKING:
+    from argparse import Namespace
+
     from fourcount.publish.answer import Question
 
 COUNTS_NEEDED = 4
@@ -47,16 +47,6 @@ class MistypedError(Exception):
     """The command line asks for something that there is not; its text is one plain sentence."""
 
 
-class _Parser(argparse.ArgumentParser):
-    """A parser whose complaints are exceptions, so that one place says them."""
-
-    def error(self, message: str) -> NoReturn:
-        option = re.match(r"argument (\S+): expected one argument", message)
-        raise MistypedError(
-            f"{option[1]} needs a value after it." if option else f"These options do not fit: {message}."
-        )
-
-
 def main(arguments: Sequence[str] | None = None) -> int:
     """Run the command and return its exit status."""
     given = sys.argv[1:] if arguments is None else list(arguments)
@@ -65,9 +55,6 @@ def main(arguments: Sequence[str] | None = None) -> int:
     except MistypedError as mistake:
         print(f"fourcount: {mistake}", file=sys.stderr)
         return MISTYPED
-    except BrokenPipeError:
-        _let_go_of(sys.stdout)
-        return FAILED
 
 
 def _run(given: list[str]) -> int:
@@ -84,9 +71,7 @@ def _run(given: list[str]) -> int:
 
 
 def _answer(given: list[str]) -> int:
-    # Behind a blank a negative number is no option to argparse, and our own sentence can say what is wrong with it.
-    shielded = [f" {word}" if _MINUS_NUMBER.match(word) else word for word in given]
-    wanted, unknown = _answer_parser().parse_known_intermixed_args(shielded)
+    wanted, unknown = _parsed(given)
     if wanted.help:
         return _say(HELP)
     if wanted.version:
@@ -99,6 +84,8 @@ def _answer(given: list[str]) -> int:
     outcome, choices = question.outcome, question.choices
     findings = appraise(outcome, choices)
     if wanted.json:
+        import json
+
         from fourcount.publish.contract import contract
 
         return _say(json.dumps(contract(outcome, choices, findings), indent=2, allow_nan=False) + "\n")
@@ -107,12 +94,12 @@ def _answer(given: list[str]) -> int:
     return _say(listing(outcome, findings, choices))
 
 
-def _question(wanted: argparse.Namespace) -> Question:
+def _question(wanted: Namespace) -> Question:
     """The counts and options as read; MistypedError with the sentence of whatever cannot be."""
     from fourcount.publish.answer import asked
 
     if len(wanted.counts) != COUNTS_NEEDED:
-        raise MistypedError(f"Four counts are needed after 'answer', and {len(wanted.counts)} are there.")
+        raise MistypedError(f"Four counts are needed after 'answer', not {len(wanted.counts)}.")
     try:
         return asked(
             tuple(_count(text) for text in wanted.counts),
@@ -156,9 +143,22 @@ def _level(text: str) -> float:
     return reading.value
 
 
-def _answer_parser() -> _Parser:
-    # Nothing is checked here but the grammar: what a value may be is said by our own sentences.
-    parser = _Parser(prog="fourcount answer", add_help=False, allow_abbrev=False)
+def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
+    """The words behind ``answer`` sorted into counts, options and words that are neither.
+
+    Only the grammar is looked at here: what a value may be is said by our own sentences.
+    """
+    from argparse import ArgumentParser  # the window starts without it
+
+    class Parser(ArgumentParser):
+        """A parser whose complaints are exceptions, so that one place says them."""
+
+        def error(self, message: str) -> NoReturn:
+            option = re.match(r"argument (\S+): expected one argument", message)
+            said = f"{option[1]} needs a value after it." if option else f"These options do not fit: {message}."
+            raise MistypedError(said)
+
+    parser = Parser(prog="fourcount answer", add_help=False, allow_abbrev=False)
     parser.add_argument("counts", nargs="*")
     parser.add_argument("--design", default="trial")
     parser.add_argument("--level", default="95")
@@ -167,7 +167,8 @@ def _answer_parser() -> _Parser:
     for switch in ("--welcome", "--json", "--version"):
         parser.add_argument(switch, action="store_true")
     parser.add_argument("--help", "-h", action="store_true")
-    return parser
+    # Behind a blank a negative number is no option, and our own sentence can say what is wrong with it.
+    return parser.parse_known_intermixed_args([f" {word}" if _MINUS_NUMBER.match(word) else word for word in given])
 
 
 def _open_window() -> int:
@@ -185,11 +186,19 @@ def _display_in(environment: Mapping[str, str]) -> bool:
 
 
 def _say(text: str) -> int:
-    """Write to stdout at once, so that a reader who has gone is noticed here and not while Python ends."""
-    if sys.stdout.encoding.lower().replace("-", "") != "utf8" and hasattr(sys.stdout, "reconfigure"):
+    """Write to stdout at once, so that what stops it is noticed here and not while Python ends."""
+    if "utf" not in (sys.stdout.encoding or "utf").lower() and hasattr(sys.stdout, "reconfigure"):
         sys.stdout.reconfigure(errors="replace")
-    sys.stdout.write(text)
-    sys.stdout.flush()
+    try:
+        sys.stdout.write(text)
+        sys.stdout.flush()
+    except BrokenPipeError:  # whoever read this has had enough
+        _let_go_of(sys.stdout)
+        return FAILED
+    except OSError as trouble:
+        _let_go_of(sys.stdout)
+        print(f"fourcount: Nothing could be written: {trouble.strerror or trouble}.", file=sys.stderr)
+        return FAILED
     return GOOD
 
 
