@@ -42,8 +42,9 @@ def _measure(key: str, figures: Figures, support: Support, *, welcome: bool) -> 
     if key == "number_needed":
         return number_needed_from(figures["risk_difference"], welcome=welcome)
     figure = figures[key]
-    whole_gap = isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap)
-    return figure.estimate if isinstance(figure.estimate, Gap) and whole_gap else figure
+    if isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap):
+        return figure.estimate
+    return figure
 
 
 def number_needed_from(difference: Figure, *, welcome: bool) -> NumberNeeded | Gap:
