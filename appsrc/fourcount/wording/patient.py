@@ -72,7 +72,7 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         summary_bold=_change(patient.difference, people),
         summary=_summary(outcome, patient, people),
         detail=_detail(patient, people),
-        scale=_scale(denominator),
+        scale="" if isinstance(change, Gap) else _scale(denominator),
         missing=missing(outcome),
         picture_sentence=_picture_sentence(outcome, patient, people),
     )
@@ -91,10 +91,10 @@ def missing(outcome: Outcome) -> tuple[str, ...]:
 
 def _text_only_denominator(patient: PatientFindings) -> int:
     """Where nothing can be drawn, the smallest round number of people whose whole numbers say what is so."""
-    parts = (patient.without.estimate, patient.with_.estimate, patient.difference.estimate)
-    without, with_, change = (0.0 if isinstance(part, Gap) else part for part in parts)
-    if any(isinstance(part, Gap) for part in parts):
-        return 100
+    without = 0.0 if isinstance(patient.without.estimate, Gap) else patient.without.estimate
+    with_, change = patient.with_.estimate, patient.difference.estimate
+    if isinstance(with_, Gap) or isinstance(change, Gap):
+        with_, change = without, 0.0
     return choose(without, with_, change, Gap("follows")).denominator
 
 
@@ -153,7 +153,7 @@ def _change(difference: Figure, people: int) -> str:
     if isinstance(change, Gap):
         return ""
     if change == 0:
-        return f"The same in {numbers.whole(people)}"
+        return f"The same number in {numbers.whole(people)}"
     return f"{_size(change, people)} {limits.side(change)} in {numbers.whole(people)}"
 
 
@@ -170,6 +170,8 @@ def _range(patient: PatientFindings, people: int) -> str:
 
 
 def _summary(outcome: Outcome, patient: PatientFindings, people: int) -> str:
+    if isinstance(patient.difference.estimate, Gap):
+        return ""
     interval = _range(patient, people)
     parts = (names.over_span(outcome), f"range {interval}" if interval else "")
     return ", ".join(part for part in parts if part)
@@ -177,6 +179,8 @@ def _summary(outcome: Outcome, patient: PatientFindings, people: int) -> str:
 
 def _detail(patient: PatientFindings, people: int) -> str:
     """What stands under the summary: number needed, relative words, and what the range leaves out."""
+    if isinstance(patient.with_.estimate, Gap):
+        return gap_text(patient.with_.estimate)
     sentences = [_number_needed(patient.number_needed), _relative(patient.risk_ratio)]
     for figure in (patient.with_, patient.difference):
         sentences += [gap_text(gap) for gap in _gaps(figure)]

@@ -30,14 +30,14 @@ def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
         return gap_text(findings.counts)
     if outcome.design == "case-control":
         return _odds_headline(outcome, findings, choices)
-    figures = [findings.measures[key] for key in ("risk_reference", "risk_index", "risk_difference")]
-    for figure in figures:
-        if isinstance(figure, Gap):
-            return gap_text(figure)
-    reference, index, difference = (figure for figure in figures if isinstance(figure, Figure))
-    for figure in (reference, index, difference):
-        if isinstance(figure.estimate, Gap):
-            return gap_text(figure.estimate)
+    figures = []
+    for key in ("risk_difference", "risk_reference", "risk_index"):  # the difference's gap names the empty group
+        figure = findings.measures[key]
+        gap = figure if isinstance(figure, Gap) else figure.estimate
+        if isinstance(gap, Gap):
+            return gap_text(gap)
+        figures += [figure] if isinstance(figure, Figure) else []
+    difference, reference, index = figures
     return _people_headline(outcome, reference, index, difference)
 
 

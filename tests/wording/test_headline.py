@@ -1,0 +1,118 @@
+"""The headline: whole people that add up, and words for every design."""
+
+from __future__ import annotations
+
+import re
+
+import pytest
+from hypothesis import given
+from hypothesis import strategies as st
+
+from fourcount.record.outcome import EventsAndOthers
+from fourcount.record.paper import Choices
+from fourcount.wording import numbers
+from fourcount.wording.sentence import headline
+
+cells = st.integers(min_value=0, max_value=10**9) | st.integers(min_value=0, max_value=60)
+PEOPLE = re.compile(
+    r"Of (?P<of>[\d,]+) people .*? (?:about )?(?P<reference>[\d,]+|none|all) fell .*?; "
+    r"of (?P=of) .*? (?:about )?(?P<index>[\d,]+|none|all)\. (?:That is (?P<difference>[\d,]+) (?P<side>fewer|more))?"
+)
+
+
+def test_the_headline_reads_as_a_sentence_about_people(outcome_of, findings_of):
+    """Reference first; the difference is rounded from itself: 17.1 and 9.2 are 7.9 apart."""
+    outcome = outcome_of(left_words_text="fell")
+    assert headline(outcome, findings_of(outcome), Choices()) == (
+        "Of 100 people with usual care about 17 fell within 12 months; of 100 with night lights about 9. "
+        "That is 8 fewer, and could be as few as 3 or as many as 13."
+    )
+
+
+def test_through_no_effect_both_sides_are_said(outcome_of, findings_of):
+    """Compatible with both, and no verdict."""
+    outcome = outcome_of((12, 88, 10, 90))
+    text = headline(outcome, findings_of(outcome), Choices())
+    assert text.endswith(
+        "That is 2 more, and could be anything from 7 fewer to 11 more: compatible with fewer and with more."
+    )
+
+
+def test_equal_risks_are_said_to_be_equal(outcome_of, findings_of):
+    """The same number, and still an interval."""
+    outcome = outcome_of((10, 90, 10, 90))
+    assert headline(outcome, findings_of(outcome), Choices()) == (
+        "Of 100 people with usual care about 10 fell at least once within 12 months; of 100 with night lights also "
+        "about 10. The difference could be anything from 9 fewer to 9 more: compatible with fewer and with more."
+    )
+
+
+def test_a_cohort_and_a_survey_name_their_groups(outcome_of, findings_of):
+    """In the group of that name; a survey without "within"."""
+    cohort = outcome_of(design="cohort", first_label_text="Smokers", second_label_text="Non-smokers")
+    text = headline(cohort, findings_of(cohort), Choices())
+    assert text.startswith("Of 100 people in the group “Non-smokers” about 17 fell at least once within 12 months; ")
+    survey = outcome_of(design="survey", left_words_text="had asthma", span_text="in 2019")
+    text = headline(survey, findings_of(survey), Choices())
+    assert text.startswith("Of 100 people in the group “Usual care” about 17 had asthma in 2019; of 100 in the group ")
+
+
+def test_a_case_control_study_speaks_of_odds_only(outcome_of, findings_of):
+    """Its totals are those of cases and controls."""
+    outcome = outcome_of(design="case-control")
+    assert headline(outcome, findings_of(outcome), Choices()) == (
+        "The odds that a person in the group “Night lights” fell at least once within 12 months were 0.49 times those "
+        "in the group “Usual care” (95% interval 0.32 to 0.75)."
+    )
+
+
+def test_an_empty_table_asks_for_its_counts(outcome_of, findings_of):
+    """One quiet instruction."""
+    outcome = outcome_of()
+    empty = type(outcome)(table=EventsAndOthers())
+    assert headline(empty, findings_of(empty), Choices()) == "Type the four counts of the table."
+
+
+def test_a_group_of_nobody_is_said(outcome_of, findings_of):
+    """No sentence about risks that are not there."""
+    outcome = outcome_of((0, 0, 3, 4))
+    assert headline(outcome, findings_of(outcome), Choices()) == "There is nobody in the index group."
+
+
+@pytest.mark.parametrize(
+    ("counts", "of"),
+    [
+        ((38, 374, 70, 339), 100),
+        ((26, 974, 24, 976), 1_000),  # 2.6 and 2.4 would both round near 2 to 3 and say 1 for 0.2
+        ((1, 9999, 3, 9997), 10_000),
+        ((1, 999_999_999, 3, 999_999_997), 1_000_000_000),
+        ((150, 850, 150, 850), 100),
+        ((0, 50, 7, 43), 100),
+    ],
+)
+def test_the_denominator_is_the_smallest_that_tells_the_truth(outcome_of, findings_of, counts, of):
+    """Finer where 100 people would hide or invent a difference."""
+    outcome = outcome_of(counts)
+    assert headline(outcome, findings_of(outcome), Choices()).startswith(f"Of {numbers.whole(of)} people")
+
+
+@given(st.tuples(cells, cells, cells, cells))
+def test_the_printed_numbers_add_up(outcome_of, findings_of, counts):
+    """The printed difference is the printed parts' own; nobody and everybody are only said of who they are."""
+    a, b, c, d = counts
+    if a + b == 0 or c + d == 0:
+        return
+    outcome = outcome_of(counts)
+    match = PEOPLE.match(headline(outcome, findings_of(outcome), Choices()))
+    assert match is not None
+    of = int(match["of"].replace(",", ""))
+    words = {"none": "0", "all": str(of)}
+    reference, index = (int(words.get(match[g], match[g]).replace(",", "")) for g in ("reference", "index"))
+    assert (match["reference"] == "none", match["index"] == "none") == (c == 0, a == 0)
+    assert (match["reference"] == "all", match["index"] == "all") == (d == 0, b == 0)
+    if a * d == b * c:
+        assert reference == index
+        assert match["difference"] is None
+    elif of < 10**9:
+        assert int(match["difference"].replace(",", "")) == abs(index - reference) > 0
+        assert match["side"] == ("fewer" if a * d < b * c else "more")

@@ -1,0 +1,146 @@
+"""Every key that can reach a reader has its sentence."""
+
+from __future__ import annotations
+
+import re
+
+import pytest
+
+from fourcount.appraisal.cautions import CAUTIONS
+from fourcount.appraisal.findings import GAP_KEYS as APPRAISAL_KEYS
+from fourcount.appraisal.findings import Caution
+from fourcount.record.entry.cell import read_cell
+from fourcount.record.entry.level import read_level
+from fourcount.record.entry.readings import Mark, Unreadable
+from fourcount.record.entry.risk import read_risk
+from fourcount.stats.results import GAP_KEYS, Gap
+from fourcount.wording import cautions, gaps
+from fourcount.wording.facts import LONGEST_QUOTE
+
+MARK_KEYS = (
+    "not-a-count",
+    "negative",
+    "decimal",
+    "too-large",
+    "events-above-total",
+    "total-disagrees",
+    "percent-disagrees",
+    "not-a-risk",
+    "percent-or-fraction",
+    "risk-out-of-range",
+    "not-a-level",
+    "level-out-of-range",
+)
+FACTS = {
+    "odds_ratio": 0.4921,
+    "risk_ratio": 0.5389,
+    "effect": "risk_ratio",
+    "value": 0.5389,
+    "baseline": 0.12,
+    "study": 70 / 409,
+    "design": "cohort",
+    "count": 1,
+    "measure": "odds_ratio",
+    "risk": 0.004,
+    "side": "more",
+}
+
+
+@pytest.mark.parametrize("key", [*GAP_KEYS, *APPRAISAL_KEYS])
+def test_every_reason_for_no_figure_has_a_sentence(key):
+    """Each ends as a sentence does and is its own."""
+    text = gaps.gap_text(Gap(key))
+    assert text != gaps.UNKNOWN_GAP
+    assert text.endswith(".")
+    assert text[0].isupper()
+
+
+@pytest.mark.parametrize("key", MARK_KEYS)
+def test_every_mark_quotes_what_was_typed_and_says_what_is_wrong(key):
+    """``-3: a count cannot be negative``."""
+    text = gaps.mark_text(Mark(field="", key=key, facts={"text": "-3"}))
+    assert text.startswith("-3: ")
+    assert text != gaps.mark_text(Mark(field="", key="?", facts={"text": "-3"}))
+
+
+@pytest.mark.parametrize(
+    ("read", "typed"),
+    [
+        (read_cell, "-3"),
+        (read_cell, "3.5"),
+        (read_cell, "9" * 12),
+        (read_cell, "9/3"),
+        (read_cell, "none"),
+        (read_risk, "often"),
+        (read_risk, "0.12"),
+        (read_risk, "120%"),
+        (read_level, "high"),
+        (read_level, "50"),
+    ],
+)
+def test_what_the_entry_cannot_read_is_explained(read, typed):
+    """The keys that reading really gives are the ones that have sentences."""
+    reading = read(typed)
+    assert isinstance(reading, Unreadable)
+    assert reading.key in MARK_KEYS
+    assert gaps.mark_text(reading).startswith(f"{typed}: ")
+
+
+def test_a_negative_count_is_refused_in_so_many_words():
+    """The sentence names what is wrong."""
+    assert gaps.mark_text(Mark(field="", key="negative", facts={"text": "-3"})) == "-3: a count cannot be negative"
+
+
+def test_a_long_text_is_quoted_short_and_on_one_line():
+    """Forty characters of what was typed, whatever it holds."""
+    text = gaps.mark_text(Mark(field="", key="not-a-count", facts={"text": "{a}\n" * 30}))
+    assert len(text.split(": ")[0]) <= LONGEST_QUOTE
+    assert "\n" not in text
+
+
+@pytest.mark.parametrize("key", [rule.key for rule in CAUTIONS])
+def test_every_caution_has_a_title_and_a_sentence_with_its_numbers(key):
+    """No caution of the table is without words, and no fact stays in braces."""
+    caution = Caution(key=key, facts=FACTS)
+    text = cautions.caution_text(caution)
+    assert cautions.caution_title(caution) != cautions.UNKNOWN[0]
+    assert text.endswith(".")
+    assert not re.search(r"[{}…]", text)
+
+
+@pytest.mark.parametrize("key", [*cautions.TEXTS, "a key of a later version"])
+def test_a_caution_without_its_facts_is_still_a_sentence(key):
+    """A hole in the facts never raises."""
+    assert cautions.caution_text(Caution(key=key)).endswith(".")
+
+
+def test_a_caution_says_the_numbers_it_is_about():
+    """The risk ratio kept constant names both risks."""
+    text = cautions.caution_text(Caution(key="effect-kept-constant", facts=FACTS))
+    assert text == "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%."
+
+
+def test_several_zeros_are_counted():
+    """One is, two are."""
+    one, two = (cautions.caution_text(Caution(key="zero-cells", facts={"count": n})) for n in (1, 2))
+    assert one.startswith("One of the four counts is 0")
+    assert two.startswith("Two of the four counts are 0")
+
+
+@pytest.mark.parametrize("block", [cautions.STANDING, " ".join(cautions.STANDING_FULL)])
+@pytest.mark.parametrize(
+    "part",
+    [
+        "alculates and displays what a study’s numbers imply",
+        "oes not recommend",
+        "does not replace clinical judgement, local guidelines or qualified advice",
+        "what was typed",
+        "against the paper",
+        "verages of a study’s people",
+        "ne study is not all the evidence",
+        "ot assessed as a medical device",
+    ],
+)
+def test_the_standing_block_leaves_nothing_out(block, part):
+    """On screen and in exports the same things are said."""
+    assert part in block

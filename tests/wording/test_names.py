@@ -1,0 +1,76 @@
+"""The reader's own words inside our sentences."""
+
+from __future__ import annotations
+
+import pytest
+
+from fourcount.wording import names
+
+
+@pytest.mark.parametrize(
+    ("text", "inside"),
+    [
+        ("Usual care", "usual care"),
+        ("ACE inhibitor", "ACE inhibitor"),
+        ("Vitamin D", "vitamin D"),
+        ("X", "X"),
+        ("mRNA vaccine", "mRNA vaccine"),
+        ("Non-smokers", "non-smokers"),
+        ("5-FU", "5-FU"),
+        ("Beta-blocker", "beta-blocker"),
+        ("", ""),
+    ],
+)
+def test_a_label_loses_its_capital_only_if_it_is_an_ordinary_word(text, inside):
+    """One capital followed by small letters, and nothing else."""
+    assert names.mid_sentence(text) == inside
+
+
+def test_a_group_is_with_its_treatment_in_a_trial_and_by_name_elsewhere(outcome_of):
+    """Any noun fits: smokers are not something one is "with"."""
+    trial = outcome_of(first_label_text="Night lights")
+    cohort = outcome_of(first_label_text="Smokers", design="cohort")
+    assert names.in_group(trial, "index") == "with night lights"
+    assert names.in_group(cohort, "index") == "in the group “Smokers”"
+
+
+def test_a_group_without_a_label_has_a_stand_in(outcome_of):
+    """The index group and the reference group, in every design."""
+    outcome = outcome_of(first_label_text=" ", second_label_text="", design="cohort")
+    assert names.in_group(outcome, "index") == "in the index group"
+    assert names.label(outcome, "reference") == "reference group"
+
+
+@pytest.mark.parametrize(
+    ("span", "within", "over"),
+    [
+        ("12 months", "within 12 months", "over 12 months"),
+        ("at 5 years", "at 5 years", "at 5 years"),
+        ("During the stay", "During the stay", "During the stay"),
+        ("inpatient stay", "within inpatient stay", "over inpatient stay"),
+        ("  ", "", ""),
+    ],
+)
+def test_a_span_takes_a_preposition_unless_it_has_one(outcome_of, span, within, over):
+    """Within after a verb, over under a figure."""
+    outcome = outcome_of(span_text=span)
+    assert (names.within_span(outcome), names.over_span(outcome)) == (within, over)
+
+
+def test_a_survey_has_no_within(outcome_of):
+    """People have a condition at a time, not within it."""
+    assert names.within_span(outcome_of(design="survey", span_text="2019")) == "(2019)"
+
+
+def test_the_event_falls_back_on_what_else_was_typed(outcome_of):
+    """The words, else the heading in quotes, else a stand-in."""
+    assert names.event_words(outcome_of()) == "fell at least once"
+    assert names.event_words(outcome_of(left_words_text="")) == "had the event “fell”"
+    assert names.event_words(outcome_of(left_words_text="", left_heading_text="")) == "had the event"
+
+
+def test_the_other_outcome_follows_what_is_counted(outcome_of):
+    """Counting the other outcome swaps the two."""
+    outcome = outcome_of(counted="right")
+    assert names.event_words(outcome) == "did not fall"
+    assert names.other_words(outcome) == "fell at least once"
