@@ -1,0 +1,264 @@
+"""The published dictionary: its keys, its nesting, and that every table keeps to them."""
+
+from __future__ import annotations
+
+import json
+import math
+from itertools import product
+from typing import Any
+
+import pytest
+from hypothesis import given, settings
+from hypothesis import strategies as st
+
+from fourcount.appraisal.appraise import appraise
+from fourcount.publish.answer import answer
+from fourcount.publish.contract import contract
+from fourcount.record.outcome import DESIGNS, Outcome, Patient
+from fourcount.record.paper import FAMILIES, Choices
+
+MEASURES = ["risk_index", "risk_reference", "risk_difference", "number_needed", "risk_ratio", "odds_ratio"]
+RISK_METHODS = {"wilson", "wilson-continuity", "clopper-pearson", "mid-p", "wald", "agresti-coull", "jeffreys"}
+METHODS = {
+    "risk_index": RISK_METHODS,
+    "risk_reference": RISK_METHODS,
+    "risk_difference": {"newcombe", "miettinen-nurminen", "agresti-caffo", "wald"},
+    "risk_ratio": {"koopman", "miettinen-nurminen", "katz"},
+    "odds_ratio": {
+        "baptista-pike-mid-p",
+        "conditional-exact",
+        "conditional-mid-p",
+        "miettinen-nurminen",
+        "woolf",
+        "gart",
+    },
+}
+TESTS = {"fisher", "fisher-mid-p", "pearson", "n-minus-1"}
+KEYS = ["format", "design", "level", "intervals", "measures", "methods", "adjusted_methods"]
+KEYS += ["conditional_odds_ratio", "tests", "conversion", "cautions"]
+
+TABLES = [
+    (15, 85, 5, 95),
+    (38, 374, 70, 339),
+    (0, 0, 0, 0),
+    (0, 10, 0, 10),
+    (10, 0, 10, 0),
+    (10, 0, 0, 10),
+    (0, 10, 10, 0),
+    (0, 10, 3, 7),
+    (3, 7, 0, 10),
+    (3, 7, 10, 0),
+    (5, 5, 5, 5),
+    (0, 0, 3, 7),
+    (3, 7, 0, 0),
+    (1, 0, 0, 0),
+    (10**6, 10**6, 10**5, 10**6),
+]
+
+
+def withheld(part: Any) -> bool:
+    """Whether a part is given up with a reason; then the reason has to be whole."""
+    if not (isinstance(part, dict) and "withheld" in part):
+        return False
+    assert set(part) == {"withheld", "text"}
+    assert all(isinstance(word, str) and word for word in part.values())
+    return True
+
+
+def check_number(part: Any, low: float = -math.inf, high: float = math.inf) -> None:
+    """A finite number in its range, an infinity as a string, or a reason."""
+    if withheld(part) or part in ("inf", "-inf"):
+        return
+    assert isinstance(part, int | float)
+    assert not isinstance(part, bool)
+    assert math.isfinite(part)
+    assert low <= part <= high
+
+
+def as_float(part: Any) -> float | None:
+    return None if isinstance(part, dict) else float(part)
+
+
+def check_ordered(low: Any, high: Any) -> None:
+    ends = as_float(low), as_float(high)
+    assert None in ends or ends[0] <= ends[1]
+
+
+def check_figure(part: Any, low: float = -math.inf, high: float = math.inf) -> None:
+    if withheld(part):
+        return
+    assert list(part)[:4] == ["estimate", "low", "high", "method"]
+    assert set(part) <= {"estimate", "low", "high", "method", "adjusted"}
+    assert part.get("adjusted", "half") == "half"
+    assert isinstance(part["method"], str)
+    check_number(part["estimate"], low, high)
+    check_number(part["low"])
+    check_number(part["high"])
+    check_ordered(part["low"], part["high"])
+
+
+def check_number_needed(part: Any) -> None:
+    if withheld(part):
+        return
+    assert list(part) == ["estimate", "kind", "low", "high", "through_infinity"]
+    check_number(part["estimate"], 0)
+    for limit in (part["low"], part["high"]):
+        assert list(limit) == ["value", "kind"]
+        check_number(limit["value"], 0)
+    assert {part["kind"], part["low"]["kind"], part["high"]["kind"]} <= {"NNTB", "NNTH", "neither"}
+    assert isinstance(part["through_infinity"], bool)
+
+
+def check_methods(published: dict[str, Any]) -> None:
+    assert set(published["methods"]) == set(METHODS)
+    for measure, methods in published["methods"].items():
+        assert set(methods) == METHODS[measure]
+        for pair in methods.values():
+            if not withheld(pair):
+                low, high = pair
+                check_number(low)
+                check_number(high)
+                check_ordered(low, high)
+    for measure, methods in published["adjusted_methods"].items():
+        assert set(methods) <= METHODS[measure]
+        assert set(methods.values()) == {"half"}
+
+
+def check_patient(part: Any) -> None:
+    if withheld(part):
+        return
+    assert list(part) == [
+        "baseline",
+        "effect",
+        "risk_without",
+        "risk_with",
+        "difference",
+        "number_needed",
+        "risk_ratio",
+        "range_from",
+    ]
+    check_number(part["baseline"], 0, 1)
+    check_number(part["risk_without"], 0, 1)
+    check_figure(part["risk_with"], 0, 1)
+    check_figure(part["difference"], -1, 1)
+    check_number_needed(part["number_needed"])
+    check_figure(part["risk_ratio"], 0)
+    assert part["effect"] in ("risk_ratio", "odds_ratio")
+    assert part["range_from"] in ("table", "effect")
+
+
+def check_all(published: dict[str, Any]) -> None:
+    """The whole structure of one answer."""
+    assert json.loads(json.dumps(published, allow_nan=False)) == published
+    assert [key for key in published if key != "patient"] == KEYS
+    assert published["format"] == 1
+    assert list(published["measures"]) == MEASURES
+    for measure in ("risk_index", "risk_reference"):
+        check_figure(published["measures"][measure], 0, 1)
+    check_figure(published["measures"]["risk_difference"], -1, 1)
+    check_number_needed(published["measures"]["number_needed"])
+    check_figure(published["measures"]["risk_ratio"], 0)
+    check_figure(published["measures"]["odds_ratio"], 0)
+    check_methods(published)
+    check_number(published["conditional_odds_ratio"], 0)
+    assert set(published["tests"]) == TESTS
+    for p in published["tests"].values():
+        check_number(p, 0, 1)
+    if not withheld(published["conversion"]):
+        assert list(published["conversion"]) == ["baseline", "baseline_from", "risk_ratio"]
+        assert published["conversion"]["baseline_from"] in ("reference", "given")
+        check_figure(published["conversion"]["risk_ratio"], 0)
+    if "patient" in published:
+        check_patient(published["patient"])
+    for caution in published["cautions"]:
+        assert list(caution) == ["key", "text"]
+        assert all(isinstance(word, str) and word for word in caution.values())
+
+
+@pytest.mark.parametrize("counts", TABLES, ids=str)
+def test_every_table_keeps_to_the_structure(counts: tuple[int, int, int, int]) -> None:
+    """Zeros, empty groups and all events give the same keys as any other table, for every design."""
+    for design, baseline in product(DESIGNS, (None, 0.12)):
+        published = answer(*counts, design=design, baseline=baseline)
+        check_all(published)
+        assert ("patient" in published) is (baseline is not None)
+
+
+@pytest.mark.parametrize("family", FAMILIES)
+def test_every_family_keeps_to_the_structure(family: str) -> None:
+    """The chosen family changes which interval stands under the measures, not the structure."""
+    for counts, level in product(TABLES[:10], (0.8, 0.999)):
+        published = answer(*counts, intervals=family, level=level, baseline="30%", unwelcome=False)
+        check_all(published)
+        assert (published["intervals"], published["level"]) == (family, level)
+
+
+@settings(max_examples=60)
+@given(
+    st.tuples(*[st.integers(0, 12)] * 4),
+    st.sampled_from(DESIGNS),
+    st.sampled_from(FAMILIES),
+    st.sampled_from([None, 0.0, 1.0, 0.05, 0.9, "1 in 8"]),
+    st.booleans(),
+)
+def test_any_small_table_keeps_to_the_structure(
+    counts: tuple[int, int, int, int], design: str, family: str, baseline: float | str | None, unwelcome: bool
+) -> None:
+    """No combination of small counts, design, family and starting risk leaves the structure."""
+    check_all(answer(*counts, design=design, intervals=family, baseline=baseline, unwelcome=unwelcome))
+
+
+@pytest.mark.parametrize("family", FAMILIES)
+def test_a_measure_stands_by_its_own_method(family: str) -> None:
+    """The interval of a measure is the one of the method it names, and corrections are named in both places."""
+    for counts in TABLES:
+        published: Any = answer(*counts, intervals=family)
+        for measure, methods in published["methods"].items():
+            figure = published["measures"][measure]
+            if not withheld(figure) and not withheld(figure["low"]):
+                assert methods[figure["method"]] == [figure["low"], figure["high"]]
+                adjusted = published["adjusted_methods"].get(measure, {}).get(figure["method"])
+                assert adjusted == figure.get("adjusted")
+
+
+def test_infinities_are_strings() -> None:
+    """A ratio against nobody is "inf", and so is its upper limit."""
+    ratio: Any = answer(3, 7, 0, 10)["measures"]
+    assert ratio["risk_ratio"]["estimate"] == "inf"
+    assert ratio["risk_ratio"]["high"] == "inf"
+    assert isinstance(ratio["risk_ratio"]["low"], float)
+
+
+def test_an_estimate_alone_can_be_withheld() -> None:
+    """No event in either group: the risk ratio is not determined, its interval is."""
+    figure: Any = answer(0, 10, 0, 10)["measures"]
+    assert withheld(figure["risk_ratio"]["estimate"])
+    assert not withheld(figure["risk_ratio"]["low"])
+
+
+def test_a_design_withholds_in_measures_and_methods() -> None:
+    """A case-control study gives its odds ratio and nothing else, by any method."""
+    published: Any = answer(38, 374, 70, 339, design="case-control")
+    for measure in MEASURES[:-1]:
+        assert withheld(published["measures"][measure])
+    for measure in ("risk_index", "risk_reference", "risk_difference", "risk_ratio"):
+        assert all(withheld(method) for method in published["methods"][measure].values())
+    assert not withheld(published["measures"]["odds_ratio"])
+    assert withheld(published["conversion"])
+
+
+def test_a_correction_is_said() -> None:
+    """Half a count added by the textbook family is named beside the figure and beside the methods."""
+    published: Any = answer(0, 10, 3, 7, intervals="textbook")
+    assert published["measures"]["odds_ratio"]["adjusted"] == "half"
+    assert published["adjusted_methods"]["odds_ratio"]["woolf"] == "half"
+
+
+def test_a_table_that_is_not_whole_is_withheld() -> None:
+    """Before all four counts are there, every figure is withheld with that reason."""
+    outcome = Outcome(patient=Patient(starting_risk_text="12%"))
+    published: Any = contract(outcome, Choices(), appraise(outcome, Choices()))
+    assert json.dumps(published, allow_nan=False)
+    assert [key for key in published if key != "patient"] == KEYS
+    for part in (*published["measures"].values(), published["methods"], published["tests"], published["patient"]):
+        assert withheld(part)
