@@ -111,57 +111,39 @@ def test_a_claim_about_an_odds_ratio_speaks_of_odds_only(outcome_of, findings_of
         assert headline(outcome, findings_of(outcome), Choices()) == f"{claim}."
 
 
-@pytest.mark.parametrize(
-    ("key", "sentence"),
-    [
-        (
-            "risk_difference",
-            (
-                "Per 100 people 7.9 fewer fell at least once within 12 months with night lights than with usual care "
-                "(95% interval 3.3 to 12.6); per 1,000 that is 79 fewer. These are percentage points, not a percentage of "
-                "the risk."
-            ),
-        ),
-        (
-            "number_needed",
-            (
-                "NNTB 13: for every 13 people with night lights rather than with usual care over 12 months, one fewer fell "
-                "at least once, on average, from a risk of 17.1% with usual care (95% interval 8 to 31). It does not say "
-                "who it is, nor that the others gain or lose nothing."
-            ),
-        ),
-        (
-            "risk_index",
-            (
-                "38 of 412 people with night lights fell at least once within 12 months: 9.2% (95% interval 6.8 to 12.4%). "
-                "It is an average of these people, not one person’s own risk."
-            ),
-        ),
-        (
-            "risk_ratio",
-            (
-                "The risk with night lights was 0.54 times that with usual care (95% interval 0.37 to 0.78): a relative "
-                "reduction of 46%. By itself it does not say how large the risk is: it was 17.1% with usual care and 9.2% "
-                "with night lights."
-            ),
-        ),
-        (
-            "odds_ratio",
-            (
-                "The odds that a person with night lights fell at least once within 12 months were 0.49 times those with "
-                "usual care (95% interval 0.32 to 0.75); odds are not risks: at 17.1% this is a risk ratio of 0.54 (0.37 "
-                "to 0.78)."
-            ),
-        ),
-        (
-            "odds_index",
-            (
-                "With night lights: 38 with the event to 374 without it, odds of 0.10 (95% interval 0.07 to 0.14). Odds "
-                "are events per non-event, not a share of all people."
-            ),
-        ),
-    ],
-)
+SENTENCES = {
+    "risk_difference": (
+        "Per 100 people 7.9 fewer fell at least once within 12 months with night lights than with usual care (95%"
+        " interval 3.3 to 12.6); per 1,000 that is 79 fewer. These are percentage points, not a percentage of the"
+        " risk."
+    ),
+    "number_needed": (
+        "NNTB 13: for every 13 people with night lights rather than with usual care over 12 months, one fewer "
+        "fell at least once, on average, from a risk of 17.1% with usual care (95% interval 8 to 31). It does not"
+        " say who it is, nor that the others gain or lose nothing."
+    ),
+    "risk_index": (
+        "38 of 412 people with night lights fell at least once within 12 months: 9.2% (95% interval 6.8 to "
+        "12.4%). It is an average of these people, not one person’s own risk."
+    ),
+    "risk_ratio": (
+        "The risk with night lights was 0.54 times that with usual care (95% interval 0.37 to 0.78): a relative "
+        "reduction of 46%. By itself it does not say how large the risk is: it was 17.1% with usual care and 9.2%"
+        " with night lights."
+    ),
+    "odds_ratio": (
+        "The odds that a person with night lights fell at least once within 12 months were 0.49 times those with "
+        "usual care (95% interval 0.32 to 0.75); odds are not risks: at 17.1% this is a risk ratio of 0.54 (0.37 "
+        "to 0.78)."
+    ),
+    "odds_index": (
+        "With night lights: 38 with the event to 374 without it, odds of 0.10 (95% interval 0.07 to 0.14). Odds "
+        "are events per non-event, not a share of all people."
+    ),
+}
+
+
+@pytest.mark.parametrize(("key", "sentence"), SENTENCES.items())
 def test_each_measure_says_what_it_means_and_what_it_is_not(outcome_of, findings_of, key, sentence):
     """One plain reading beside every figure, with its interval in the same sentence."""
     outcome = outcome_of()

@@ -96,9 +96,9 @@ def odds_ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choi
     baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
     interval = limits.bracketed(limits.ratio_interval(converted.interval, converted.estimate))
     ratio = numbers.ratio(conversion.risk_ratio.estimate)
-    return (
-        f"{claim}; odds are not risks: at {baseline} this is a risk ratio of {ratio}{interval}.{_no_interval(figure)}"
-    )
+    name = names.risk_name(outcome)
+    meant = f"odds are not {name}s: at {baseline} this is a {name} ratio of {ratio}{interval}."
+    return f"{claim}; {meant}{_no_interval(figure)}"
 
 
 def odds_ratio_claim(outcome: Outcome, figure: Figure, choices: Choices) -> str:

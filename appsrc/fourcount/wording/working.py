@@ -105,12 +105,13 @@ def _difference(counts: Counts) -> str:
     a, n1, c, n2 = counts.index_events, counts.index_total, counts.reference_events, counts.reference_total
     return (
         f"{whole(a)}/{whole(n1)} − {whole(c)}/{whole(n2)} = {_value(a, n1)} − {_value(c, n2)} "
-        f"= {plain(a / n1 - c / n2)}"
+        f"= {plain((a * n2 - c * n1) / (n1 * n2))}"
     )
 
 
 def _reciprocal(counts: Counts) -> str:
-    change = abs(counts.index_events / counts.index_total - counts.reference_events / counts.reference_total)
+    n1, n2 = counts.index_total, counts.reference_total
+    change = abs(counts.index_events * n2 - counts.reference_events * n1) / (n1 * n2)
     exact = numbers.INFINITY if change == 0 else numbers.fixed(1 / change, 2)
     return f"1/{plain(change)} = {exact}, rounded up {lines.whole_needed(counts)}"
 

@@ -1,0 +1,145 @@
+"""The patient's words: whole people, both frames, the absolute first, and what is missing."""
+
+from __future__ import annotations
+
+import pytest
+from hypothesis import given
+from hypothesis import strategies as st
+
+from fourcount.record.outcome import Outcome, Patient
+from fourcount.wording.patient import DO_NOT_ADD_UP, patient_words
+
+
+def words_of(outcome, findings_of, denominator=100):
+    return patient_words(outcome, findings_of(outcome), denominator)
+
+
+def at(starting_risk, effect="risk_ratio"):
+    return Patient(starting_risk_text=starting_risk, effect=effect)
+
+
+def test_the_example_at_twelve_per_cent(outcome_of, findings_of):
+    """Every text of the picture, from the risks themselves."""
+    words = words_of(outcome_of(patient=at("12%")), findings_of)
+    assert (words.without_title, words.with_title) == ("Without: usual care", "With: night lights")
+    assert (words.without_count, words.without_percent) == ("12 in 100", "12%")
+    assert (words.with_count, words.with_percent) == ("6 in 100", "6%")
+    assert (words.without_other, words.with_other) == ("88 did not fall", "94 did not fall")
+    assert (words.key_event, words.key_avoided, words.key_added, words.key_other) == (
+        "fell",
+        "falls avoided, on balance",
+        "",
+        "did not fall",
+    )
+    assert (words.summary_bold, words.summary) == ("6 fewer in 100", "over 12 months, range 3 to 8")
+    assert words.detail == (
+        "NNTB at this starting risk 19 (14 to 38). In relative words 46% lower (22% to 63%). "
+        "The range leaves out that 12% is itself uncertain."
+    )
+    assert words.missing == ()
+    assert words.picture_sentence == (
+        "Of 100 people with usual care 12 (12%) fell at least once within 12 months and 88 did not fall; of 100 with "
+        "night lights 6 (6%) fell at least once and 94 did not fall: 6 fewer in 100, range 3 to 8. "
+        "We cannot say which people."
+    )
+
+
+def test_the_studys_own_risk_has_the_tables_range(outcome_of, findings_of):
+    """Nothing is left out of it, so nothing is said to be."""
+    words = words_of(outcome_of(), findings_of)
+    assert words.without_title == "Without: usual care"
+    assert words.without_count == "17 in 100"
+    assert words.detail == "NNTB at this starting risk 13 (8 to 31). In relative words 46% lower (22% to 63%)."
+
+
+@pytest.mark.parametrize(
+    ("denominator", "count", "percent", "other"),
+    [
+        (100, "under 1 in 100", "0.3%", "over 99 did not fall"),
+        (1_000, "3 in 1,000", "0.3%", "997 did not fall"),
+        (10_000, "25 in 10,000", "0.25%", "9,975 did not fall"),
+    ],
+)
+def test_counts_and_percentages_say_the_same(outcome_of, findings_of, denominator, count, percent, other):
+    """The percentage has the digits of the count, and somebody is never nobody."""
+    words = words_of(outcome_of(patient=at("0.25%")), findings_of, denominator)
+    assert (words.without_count, words.without_percent, words.without_other) == (count, percent, other)
+
+
+def test_what_cannot_be_drawn_is_still_said(outcome_of, findings_of):
+    """Text on the first number of people that tells the two risks apart."""
+    words = words_of(outcome_of(patient=at("0.01%")), findings_of, None)
+    assert words.scale == "too small to draw"
+    assert (words.without_count, words.with_count) == ("10 in 100,000", "5 in 100,000")
+    assert words.summary_bold == "5 fewer in 100,000"
+
+
+def test_a_larger_picture_is_announced(outcome_of, findings_of):
+    """A change of scale is said on the picture."""
+    outcome = outcome_of(patient=at("1%"))
+    assert words_of(outcome, findings_of, 1_000).scale == "Each picture shows 1,000 people."
+    assert words_of(outcome, findings_of, 100).scale == ""
+
+
+def test_a_risk_beyond_everybody_is_withheld_and_the_odds_offered(outcome_of, findings_of):
+    """Nothing is cut off at 100%, and no relative figure stands alone."""
+    words = words_of(outcome_of(patient=at("70%"), index_group="second"), findings_of, None)
+    assert words.with_count == "not given"
+    assert words.detail == "The risk would pass 100% here; the odds ratio can be carried instead."
+    assert (words.summary_bold, words.summary, words.scale) == ("", "", "")
+    assert "the odds ratio can be carried instead" in words.picture_sentence
+
+
+def test_a_limit_beyond_everybody_leaves_the_estimate(outcome_of, findings_of):
+    """The range says that it has no upper limit, and why."""
+    words = words_of(outcome_of(patient=at("45%"), index_group="second"), findings_of)
+    assert words.with_count == "84 in 100"
+    assert words.summary == "over 12 months, range 13 to no limit"
+    assert "The risk would pass 100% here" in words.detail
+
+
+def test_without_a_starting_risk_a_case_control_study_says_what_it_needs(outcome_of, findings_of):
+    """Titles stay, figures do not appear."""
+    words = words_of(outcome_of(design="case-control"), findings_of)
+    assert words.detail.startswith("Type a starting risk from another source")
+    assert (words.with_count, words.picture_sentence) == ("", "")
+
+
+def test_what_is_not_named_yet_is_listed(findings_of, outcome_of):
+    """Event, both groups and time, before any patient sees a picture."""
+    bare = Outcome(table=outcome_of().table)
+    words = words_of(bare, findings_of)
+    assert words.missing == ("the event", "the reference group", "the index group", "the time span")
+    assert words.without_title == "Without: reference group"
+
+
+def test_a_welcome_event_is_lost_and_not_avoided(outcome_of, findings_of):
+    """Fewer of a good event is no avoidance."""
+    words = words_of(outcome_of(left_welcome=True, name_text="Recovery"), findings_of)
+    assert words.key_avoided == "recovery lost, on balance"
+    assert words.detail.startswith("NNTH at this starting risk 13")
+
+
+def test_more_events_are_added(outcome_of, findings_of):
+    """The key follows the direction."""
+    words = words_of(outcome_of(index_group="second", name_text=""), findings_of)
+    assert (words.key_avoided, words.key_added) == ("", "added, on balance")
+    assert words.summary_bold == "8 more in 100"
+
+
+def test_equal_risks_have_no_key_and_a_range(outcome_of, findings_of):
+    """No icon is avoided or added."""
+    words = words_of(outcome_of((10, 90, 10, 90)), findings_of)
+    assert (words.key_avoided, words.key_added) == ("", "")
+    assert words.summary_bold == "The same number in 100"
+    assert words.summary == "over 12 months, range 9 fewer to 9 more"
+
+
+@given(st.tuples(*[st.integers(min_value=1, max_value=500)] * 4))
+def test_the_change_is_the_counts_own_or_is_said_not_to_add_up(outcome_of, findings_of, counts):
+    """The difference is rounded from itself; where that shows, it is said."""
+    words = words_of(outcome_of(counts), findings_of, 10_000)
+    without, with_ = (int(text.split(" in ")[0].replace(",", "")) for text in (words.without_count, words.with_count))
+    change = words.summary_bold.split(" ")[0].replace(",", "")
+    said = 0 if change == "The" else int(change)
+    assert (said == abs(with_ - without)) != (DO_NOT_ADD_UP in words.detail)
