@@ -25,7 +25,8 @@ HELP = """\
 fourcount                              open the window
 fourcount answer A B C D [options]     what the four counts of one table say
 
-A and B are people with and without the event in the index group, C and D those in the reference group.
+A and B are people with and without the event in the index group,
+C and D those in the reference group.
 
 options of answer:
   --design DESIGN      trial, cohort, survey or case-control (trial)

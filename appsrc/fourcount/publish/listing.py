@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Iterable
 from textwrap import fill
 
-from fourcount.appraisal.findings import Gap, OutcomeFindings, PatientFindings
+from fourcount.appraisal.findings import Gap, OutcomeFindings
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
@@ -17,6 +17,7 @@ from fourcount.wording.sentence import headline, p_sentence
 
 WIDTH = 79
 INDENT = "  "
+LONGEST_NAME = 36
 INTERVAL_HEAD = "{level} interval"
 
 
@@ -39,15 +40,21 @@ def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
 
 
 def _figures(lines: list[MeasureLine], choices: Choices) -> str:
-    """A row for every measure, with its notes below it."""
+    """A row for every measure, with its notes below it; what is too long for the row has a line of its own."""
     head = ("", "", INTERVAL_HEAD.format(level=numbers.level(choices.level)), "")
-    rows = [(one_line(line.name), line.estimate, line.interval, line.detail) for line in lines]
-    name, estimate, interval, _ = (max(map(len, column)) for column in zip(head, *rows, strict=True))
+    cells = ((line.name, line.estimate, line.interval, line.detail) for line in lines)
+    rows = [head, *(tuple(map(one_line, row)) for row in cells)]
+    name = max(len(row[0]) for row in rows if len(row[0]) <= LONGEST_NAME)
+    estimate, interval = (max(len(row[column]) for row in rows) for column in (1, 2))
     written = []
-    for row, note in zip((head, *rows), ("", *(line.note for line in lines)), strict=True):
-        written.append(f"{row[0]:<{name}}  {row[1]:>{estimate}}  {row[2]:<{interval}}  {row[3]}".rstrip())
-        written += [_wrapped(note, INDENT)] if note else []
-    return "\n".join(written)
+    for row, note in zip(rows, ("", *(line.note for line in lines)), strict=True):
+        own, below = ("", row[0]) if len(row[0]) > name else (row[0], "")
+        figures = f"{own:<{name}}  {row[1]:>{estimate}}  {row[2]:<{interval}}"
+        whole = f"{figures}  {row[3]}".rstrip()
+        fits = len(whole) <= WIDTH
+        written += [_wrapped(below), whole if fits else figures.rstrip()]
+        written += [_wrapped("" if fits else row[3], INDENT), _wrapped(note, INDENT)]
+    return "\n".join(line for line in written if line)
 
 
 def _withheld(lines: list[MeasureLine]) -> list[str]:
@@ -59,14 +66,18 @@ def _withheld(lines: list[MeasureLine]) -> list[str]:
 
 
 def _patient(outcome: Outcome, findings: OutcomeFindings) -> str:
-    if not isinstance(findings.patient, PatientFindings):
+    """Only at a starting risk from elsewhere: at the study's own the rows above say the same."""
+    patient = findings.patient
+    if isinstance(patient, Gap) or patient.baseline_from == "reference":
         return ""
     words = patient_words(outcome, findings, None)
-    groups = ((words.without_title, words.without_percent), (words.with_title, words.with_percent))
-    width = max(len(one_line(title)) for title, _ in groups)
-    rows = [f"{INDENT}{one_line(title):<{width}}  {percent}" for title, percent in groups]
-    summary = _wrapped(", ".join(part for part in (words.summary_bold, words.summary) if part), INDENT)
-    return "\n".join([labels.COLUMNS["patient"], *rows, summary, _wrapped(words.detail, INDENT)])
+    lines = (
+        f"{words.without_title}, {words.without_percent or words.without_count}",
+        f"{words.with_title}, {words.with_percent or words.with_count}",
+        ", ".join(part for part in (words.summary_bold, words.summary) if part),
+        words.detail,
+    )
+    return "\n".join([labels.COLUMNS["patient"], *(_wrapped(line, INDENT) for line in lines if line)])
 
 
 def _cautions(findings: OutcomeFindings) -> str:

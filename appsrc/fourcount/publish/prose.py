@@ -45,16 +45,13 @@ def _study(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> lis
     """What the study's table says; one sentence where it is not whole yet."""
     if isinstance(findings.counts, Gap):
         return [headline(outcome, findings, choices)]
+    absolute = [measure_sentence(key, outcome, findings, choices) for key in ABSOLUTE]
+    relative = [measure_sentence(key, outcome, findings, choices) for key in RELATIVE]
     return [
         _counts(outcome, findings),
         headline(outcome, findings, choices),
-        _sentences(measure_sentence(key, outcome, findings, choices) for key in ABSOLUTE),
-        _sentences(
-            [
-                *(measure_sentence(key, outcome, findings, choices) for key in RELATIVE),
-                p_sentence(findings),
-            ]
-        ),
+        _paragraph(absolute),
+        _paragraph([*(text for text in relative if text not in absolute), p_sentence(findings)]),
     ]
 
 
@@ -88,7 +85,7 @@ def _cautions(findings: OutcomeFindings) -> str:
     return "\n".join([f"{labels.COLUMNS['cautions']}:", *bullets]) if bullets else ""
 
 
-def _sentences(texts: Iterable[str]) -> str:
+def _paragraph(texts: Iterable[str]) -> str:
     """The texts in one paragraph. What several of them say, or end with, is said once, at the last of them."""
     said = [text for text in dict.fromkeys(texts) if text]
     for place, text in enumerate(said):

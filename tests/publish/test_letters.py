@@ -1,0 +1,197 @@
+"""Findings as prose, as a listing for a terminal, and as a table for a spreadsheet."""
+
+from __future__ import annotations
+
+import re
+from fractions import Fraction
+
+import msgspec
+import pytest
+from hypothesis import given, settings
+from hypothesis import strategies as st
+
+from fourcount.appraisal.appraise import appraise
+from fourcount.appraisal.findings import Gap
+from fourcount.publish.listing import WIDTH, listing
+from fourcount.publish.plain_text import one_line
+from fourcount.publish.prose import prose
+from fourcount.publish.sheet import HEAD, Row, rows, tsv
+from fourcount.record.outcome import CELLS, DESIGNS, EventsAndOthers, Outcome, Patient
+from fourcount.record.paper import FAMILIES, Choices, Record
+from fourcount.wording.cautions import STANDING, STANDING_FULL, caution_text
+from fourcount.wording.example import worked_example
+from fourcount.wording.gaps import gap_text
+
+RECORD = worked_example()
+OUTCOME = RECORD.outcomes[0]
+NUMBER = re.compile(r"-?\d+(\.\d+)?(e[-+]?\d+)?|infinity")
+COUNTS = st.tuples(*[st.integers(0, 30)] * 4)
+HOSTILE = [
+    "=1+1",
+    "+1",
+    "-1",
+    "@SUM(A1)",
+    "\t=1",
+    "\uff1d1",
+    '"open',
+    "'=1",
+    "a\tb\nc\rd",
+    "\u202eevil",
+    "\x00\x1b[31m",
+]
+
+
+def outcome_of(counts: tuple[int, ...], *, design: str = "trial", risk: str = "", label: str = "") -> Outcome:
+    """An outcome of four plain counts, the reader's words all the same text."""
+    words = dict.fromkeys(("name_text", "first_label_text", "second_label_text", "left_words_text", "span_text"), label)
+    table = EventsAndOthers(**dict(zip(CELLS, map(str, counts), strict=True)))
+    return msgspec.convert(
+        {**words, "design": design, "table": msgspec.to_builtins(table), "patient": {"starting_risk_text": risk}},
+        Outcome,
+    )
+
+
+def letter(outcome: Outcome, choices: Choices | None = None) -> str:
+    record = Record(title_text="A paper", outcomes=(outcome,), choices=choices or Choices())
+    return prose(record, outcome, appraise(outcome, record.choices), version="9.9", date="1 May 2030")
+
+
+def table_of(outcome: Outcome, choices: Choices | None = None) -> tuple[Row, ...]:
+    chosen = choices or Choices()
+    return rows(outcome, appraise(outcome, chosen), chosen)
+
+
+def on_screen(outcome: Outcome, choices: Choices | None = None) -> str:
+    chosen = choices or Choices()
+    return listing(outcome, appraise(outcome, chosen), chosen)
+
+
+def test_a_letter_holds_names_counts_and_origin() -> None:
+    """The reader's words, the four counts, version and date are all there."""
+    findings = appraise(OUTCOME, RECORD.choices)
+    text = prose(RECORD, OUTCOME, findings, version="9.9", date="1 May 2030")
+    for part in ("Falls", RECORD.title_text, RECORD.source_text, "night lights", "38", "374", "70", "339", "12 months"):
+        assert part in text
+    assert text.rstrip().splitlines()[-1].count("9.9") == 1
+    assert "1 May 2030" in text
+
+
+def test_a_letter_says_the_absolute_first() -> None:
+    """Risks and their difference come before any ratio."""
+    text = letter(OUTCOME)
+    assert text.index("17.1%") < text.index("0.54")
+    assert text.index("NNTB") < text.index("0.54") < text.index("0.49")
+
+
+@pytest.mark.parametrize("design", DESIGNS)
+def test_every_export_carries_the_cautions(design: str) -> None:
+    """Each caution that holds, and the standing block, is in the letter, the sheet and the listing."""
+    outcome = outcome_of((3, 97, 0, 100), design=design, risk="12%")
+    findings = appraise(outcome, Choices())
+    texts = [letter(outcome), tsv(outcome, findings, Choices()), " ".join(on_screen(outcome).split())]
+    assert findings.cautions
+    for caution in findings.cautions:
+        assert all(one_line(caution_text(caution)) in text for text in texts)
+    assert all(sentence in text for sentence in STANDING_FULL for text in texts[:2])
+    assert STANDING in texts[2]
+
+
+def test_a_shared_reason_is_said_once() -> None:
+    """What a case-control study withholds is explained once in a letter and once in a listing."""
+    outcome = outcome_of((38, 374, 70, 339), design="case-control")
+    findings = appraise(outcome, Choices())
+    gap = findings.measures["risk_index"]
+    assert isinstance(gap, Gap)
+    assert gap == findings.measures["risk_ratio"]
+    reason = gap_text(gap)
+    assert letter(outcome).count(reason) == 1
+    assert " ".join(on_screen(outcome).split()).count(reason) == 1
+
+
+def test_a_given_starting_risk_is_in_every_export() -> None:
+    """The patient's figures follow wherever a starting risk was typed."""
+    outcome = outcome_of((38, 374, 70, 339), risk="12%")
+    assert "For one patient" in letter(outcome)
+    assert "For one patient" in on_screen(outcome)
+    assert sum(row[0].startswith("For one patient, 12%") for row in table_of(outcome)) == 4
+    assert not any(row[0].startswith("For one patient") for row in table_of(OUTCOME))
+
+
+def test_long_names_leave_the_figures_in_their_columns() -> None:
+    """A label of any length is wrapped above its figures, and no line is wider than a terminal."""
+    text = on_screen(outcome_of((38, 374, 70, 339), label="a very long name " * 20))
+    assert all(len(line) <= WIDTH for line in text.splitlines())
+    assert "0.49  0.32 to 0.75" in text
+
+
+def test_a_table_that_is_not_whole_says_so() -> None:
+    """An empty table gives a sentence and the standing block, and no figure."""
+    empty = Outcome(patient=Patient(starting_risk_text="x"))
+    assert STANDING_FULL[0] in letter(empty)
+    assert " ".join(on_screen(empty).split()).endswith(STANDING)
+    assert all(row[1:4] == ("", "", "") for row in table_of(empty)[1:])
+
+
+def test_a_sheet_holds_unrounded_numbers() -> None:
+    """The sheet's figures are the findings', to the last digit."""
+    found = {row[0]: row for row in table_of(OUTCOME)}
+    assert table_of(OUTCOME)[0] == HEAD
+    assert float(found["Difference"][1]) == float(Fraction(38, 412) - Fraction(70, 409))
+    assert found["Odds ratio"][4] == "miettinen-nurminen"
+    assert float(found["p, two-sided"][1]) == pytest.approx(0.000829, abs=5e-7)
+
+
+def test_a_limit_of_another_kind_names_it() -> None:
+    """Where the number needed runs through infinity, the limit on the other side says its kind."""
+    found = {row[0]: row for row in table_of(outcome_of((5, 5, 6, 4)))}
+    row = found["NNTB in the study"]
+    assert NUMBER.fullmatch(row[2])
+    assert row[3].startswith("NNTH ")
+    assert row[4]
+
+
+@settings(max_examples=60)
+@given(COUNTS, st.sampled_from(DESIGNS), st.sampled_from(FAMILIES), st.sampled_from(["", "12%", "0%", "100%", "x"]))
+def test_every_table_can_be_exported(counts: tuple[int, ...], design: str, family: str, risk: str) -> None:
+    """Any table gives a letter, a listing within its width and a sheet whose numbers are numbers."""
+    choices = msgspec.convert({"family": family}, Choices)
+    outcome = outcome_of(counts, design=design, risk=risk)
+    assert letter(outcome, choices).endswith(".\n")
+    assert all(len(line) <= WIDTH for line in on_screen(outcome, choices).splitlines())
+    for row in table_of(outcome, choices)[1:]:
+        assert len(row) == len(HEAD)
+        for cell in row[1:4]:
+            assert cell == "" or NUMBER.fullmatch(cell.removeprefix("NNTB ").removeprefix("NNTH "))
+
+
+@pytest.mark.parametrize("label", HOSTILE, ids=ascii)
+def test_what_was_typed_cannot_break_out(label: str) -> None:
+    """No label becomes a formula, a new cell or a new row, nor moves a terminal's cursor."""
+    outcome = outcome_of((38, 374, 70, 339), label=label, risk="12%")
+    findings = appraise(outcome, Choices())
+    sheet = tsv(outcome, findings, Choices())
+    lines = sheet.split("\n")
+    assert lines.pop() == ""
+    assert len(lines) == len(table_of(outcome))
+    for line in lines:
+        cells = line.split("\t")
+        assert len(cells) == len(HEAD)
+        for cell in cells:
+            assert NUMBER.fullmatch(cell) or not cell.startswith(("=", "+", "-", "@", "\uff1d", '"'))
+    for text in (sheet, letter(outcome), on_screen(outcome)):
+        assert not re.search("[\x00-\x08\x0b-\x1f\x7f\u202a-\u202e\u2066-\u2069]", text)
+
+
+@given(st.text(st.characters(exclude_categories=())))
+def test_one_line_is_one_line(text: str) -> None:
+    """Whatever comes in, no break, tab or control character comes out, and nothing is put right twice."""
+    line = one_line(text)
+    assert len(line.splitlines()) <= 1
+    assert "\t" not in line
+    assert one_line(line) == line
+    line.encode()
+
+
+def test_words_joined_by_invisible_marks_stay_joined() -> None:
+    """Letters of scripts that need a joiner keep it."""
+    assert one_line("\u0645\u06cc\u200c\u0627\u0641\u062a\u062f") == "\u0645\u06cc\u200c\u0627\u0641\u062a\u062f"

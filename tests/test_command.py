@@ -1,0 +1,216 @@
+"""The command: what it prints, and that every mistake is answered with one sentence."""
+
+from __future__ import annotations
+
+import io
+import json
+import os
+import subprocess
+import sys
+from collections.abc import Mapping
+from typing import Any
+
+import pytest
+
+from fourcount import __main__ as command
+from fourcount import __version__, answer
+
+TRIAL = ["15", "85", "5", "95"]
+
+
+def run(*arguments: str, environment: Mapping[str, str] | None = None) -> subprocess.CompletedProcess[str]:
+    """The command in a process of its own."""
+    return subprocess.run(
+        [sys.executable, "-m", "fourcount", *arguments],
+        capture_output=True,
+        text=True,
+        encoding="utf-8",
+        env=None if environment is None else dict(environment),
+        check=False,
+    )
+
+
+def test_json_is_what_the_function_gives(capsys: pytest.CaptureFixture[str]) -> None:
+    """The command prints exactly the dictionary of the function."""
+    assert command.main(["answer", *TRIAL, "--json"]) == 0
+    assert json.loads(capsys.readouterr().out) == answer(15, 85, 5, 95)
+
+
+def test_options_reach_the_answer(capsys: pytest.CaptureFixture[str]) -> None:
+    """Every option changes what it names, wherever it stands between the counts."""
+    words = ["15", "--design", "cohort", "85", "--level", "90%", "5", "95", "--intervals=exact", "--welcome", "--json"]
+    assert command.main(["answer", *words, "--baseline", "12 in 100"]) == 0
+    expected = answer(15, 85, 5, 95, design="cohort", level=0.9, intervals="exact", baseline=0.12, unwelcome=False)
+    assert json.loads(capsys.readouterr().out) == expected
+
+
+@pytest.mark.parametrize("design", ["trial", "cohort", "survey", "case-control"])
+def test_text_is_readable_and_ends_with_the_cautions(design: str, capsys: pytest.CaptureFixture[str]) -> None:
+    """The text names the odds ratio with its interval, and its last paragraph is the standing block."""
+    from fourcount.wording.cautions import STANDING
+
+    assert command.main(["answer", "38", "374", "70", "339", "--design", design]) == 0
+    said = capsys.readouterr()
+    assert "0.49  0.32 to 0.75" in said.out
+    assert " ".join(said.out.split()).endswith(STANDING)
+    assert said.err == ""
+
+
+def test_counts_are_read_as_people_type_them(capsys: pytest.CaptureFixture[str]) -> None:
+    """A thousands mark in a count is no mistake."""
+    assert command.main(["answer", "1,204", "8 796", "1'000", "9000", "--json"]) == 0
+    assert json.loads(capsys.readouterr().out) == answer(1204, 8796, 1000, 9000)
+
+
+MISTAKES = [
+    ["answer"],
+    ["answer", "1", "2", "3"],
+    ["answer", "1", "2", "3", "4", "5"],
+    ["answer", "-3", "2", "3", "4"],
+    ["answer", "1", "2", "3", "-4"],
+    ["answer", "1", "2", "3", "-4x"],
+    ["answer", "1", "2", "3", "-1,204"],
+    ["answer", "1", "2", "3", "\u22124"],
+    ["answer", "1", "2", "3", "4.5"],
+    ["answer", "1", "2", "3", "x"],
+    ["answer", "1", "2", "3", ""],
+    ["answer", "1", "2", "3", "4\ud800"],
+    ["answer", "1", "2", "3", "9" * 5000],
+    ["answer", "1", "2", "3", "1000000001"],
+    ["answer", "1", "2", "3", "3/4"],
+    ["answer", "1", "2", "3", "3 (4%)"],
+    ["answer", *TRIAL, "--design", "paired"],
+    ["answer", *TRIAL, "--design"],
+    ["answer", *TRIAL, "--intervals", "wald"],
+    ["answer", *TRIAL, "--level", "120"],
+    ["answer", *TRIAL, "--level", "-95"],
+    ["answer", *TRIAL, "--level", "high"],
+    ["answer", *TRIAL, "--level="],
+    ["answer", *TRIAL, "--level"],
+    ["answer", *TRIAL, "--baseline", "0.12"],
+    ["answer", *TRIAL, "--baseline", "-3%"],
+    ["answer", *TRIAL, "--baseline", ""],
+    ["answer", *TRIAL, "--json=yes"],
+    ["answer", *TRIAL, "--jso"],
+    ["answer", *TRIAL, "--bogus"],
+    ["answer", *TRIAL, "-x"],
+    ["answer", "paper.fourcount"],
+    ["paper.fourcount"],
+    ["handout", "paper.fourcount"],
+    ["--bogus"],
+    ["answer\nanswer"],
+    [""],
+]
+
+
+@pytest.mark.parametrize("words", MISTAKES, ids=lambda words: ascii(" ".join(words))[:50])
+def test_a_mistake_is_answered_with_one_sentence(words: list[str], capsys: pytest.CaptureFixture[str]) -> None:
+    """Exit status 2, one line on stderr that ends like a sentence, nothing on stdout."""
+    assert command.main(words) == 2
+    said = capsys.readouterr()
+    assert said.out == ""
+    assert said.err.startswith("fourcount: ")
+    assert said.err.endswith(".\n")
+    assert said.err.count("\n") == 1
+    assert len(said.err) < 200
+
+
+@pytest.mark.parametrize("words", [["--help"], ["-h"], ["answer", "--help"], ["answer", *TRIAL, "-h"]])
+def test_help_is_given(words: list[str], capsys: pytest.CaptureFixture[str]) -> None:
+    """Help names every option and goes to stdout."""
+    assert command.main(words) == 0
+    said = capsys.readouterr().out
+    for option in ("--design", "--level", "--intervals", "--baseline", "--welcome", "--json", "--version", "--help"):
+        assert option in said
+    assert all(len(line) <= 80 for line in said.splitlines())
+
+
+@pytest.mark.parametrize("words", [["--version"], ["answer", "--version"]])
+def test_the_version_is_given(words: list[str], capsys: pytest.CaptureFixture[str]) -> None:
+    """The version is the package's."""
+    assert command.main(words) == 0
+    assert capsys.readouterr().out == f"fourcount {__version__}\n"
+
+
+def test_no_words_open_the_window(monkeypatch: pytest.MonkeyPatch) -> None:
+    """Without words the window runs, with no file, and its exit status is the command's."""
+    opened: list[Any] = []
+
+    class Application:
+        @staticmethod
+        def run(path: str | None) -> int:
+            opened.append(path)
+            return 7
+
+    monkeypatch.setitem(sys.modules, "fourcount.face.application", Application)  # type: ignore[arg-type]
+    monkeypatch.setenv("QT_QPA_PLATFORM", "offscreen")
+    assert command.main([]) == 7
+    assert opened == [None]
+
+
+@pytest.mark.skipif(not sys.platform.startswith("linux"), reason="other systems always have a display")
+def test_without_a_display_the_window_says_so() -> None:
+    """One sentence and exit status 1 instead of an abort, where no display is there."""
+    bare = {
+        key: value for key, value in os.environ.items() if key not in ("DISPLAY", "WAYLAND_DISPLAY", "QT_QPA_PLATFORM")
+    }
+    ended = run(environment=bare)
+    assert ended.returncode == 1
+    assert ended.stdout == ""
+    assert ended.stderr.count("\n") == 1
+    assert "display" in ended.stderr
+
+
+def test_figures_need_no_window_and_their_text_no_numpy() -> None:
+    """Neither Qt nor matplotlib is loaded for an answer, and the default text not even numpy."""
+    code = (
+        "import sys; from fourcount.__main__ import main; main(sys.argv[1:])\n"
+        "print(sorted({'PySide6', 'matplotlib', 'numpy', 'scipy', 'argparse'} & set(sys.modules)))"
+    )
+    for words, expected in (([], "['argparse']"), (["--json"], "['argparse', 'numpy', 'scipy']")):
+        ended = subprocess.run(
+            [sys.executable, "-c", code, "answer", *TRIAL, *words],
+            capture_output=True,
+            text=True,
+            encoding="utf-8",
+            check=True,
+        )
+        assert ended.stdout.splitlines()[-1] == expected
+
+
+def test_a_reader_who_has_gone_is_no_trouble() -> None:
+    """A pipe that is closed at the other end ends the command without a word."""
+    with subprocess.Popen(
+        [sys.executable, "-m", "fourcount", "answer", *TRIAL, "--json"], stdout=subprocess.PIPE, stderr=subprocess.PIPE
+    ) as process:
+        assert process.stdout is not None
+        assert process.stderr is not None
+        process.stdout.close()
+        assert process.stderr.read() == b""
+    assert process.returncode == 1
+
+
+@pytest.mark.skipif(not os.path.exists("/dev/full"), reason="needs a device that is always full")  # noqa: PTH110
+def test_a_full_disk_is_said_in_one_sentence() -> None:
+    """What cannot be written is one sentence and exit status 1."""
+    with open("/dev/full", "w", encoding="utf-8") as full:  # noqa: PTH123
+        ended = subprocess.run(
+            [sys.executable, "-m", "fourcount", "answer", *TRIAL],
+            stdout=full,
+            stderr=subprocess.PIPE,
+            text=True,
+            check=False,
+        )
+    assert ended.returncode == 1
+    assert ended.stderr.count("\n") == 1
+
+
+def test_a_narrow_terminal_encoding_loses_no_figure(monkeypatch: pytest.MonkeyPatch) -> None:
+    """Where the terminal cannot show a character, a question mark stands for it and the rest is there."""
+    narrow = io.TextIOWrapper(io.BytesIO(), encoding="ascii")
+    monkeypatch.setattr(sys, "stdout", narrow)
+    assert command.main(["answer", "0", "100", "5", "95"]) == 0
+    narrow.flush()
+    said = narrow.buffer.getvalue().decode("ascii")  # type: ignore[attr-defined]
+    assert "study?s" in said
+    assert "95% interval" in said
