@@ -18,7 +18,7 @@ FINEST_FOR_LIMITS = 10_000  # for an interval's sake alone the sentence does not
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class People:
-    """Whole people of ``denominator``; the difference and its limits are sizes, ``low`` the smaller one."""
+    """Whole people of ``denominator``; the difference is a size."""
 
     denominator: int
     reference: int
@@ -26,8 +26,8 @@ class People:
     difference: int
 
 
-def choose(reference: float, index: float, difference: float, interval: Interval | Range | Gap) -> People:
-    """The smallest denominator at which the sentence says nothing that is not so."""
+def choose(reference: float, index: float, difference: float, interval: Interval | Range | Gap | None = None) -> People:
+    """The smallest denominator at which the sentence says nothing that is not so, of its interval too if one is said."""
     fitting = [d for d in DENOMINATORS if _true_at(d, reference, index, difference)] or [DENOMINATORS[-1]]
     fine = [d for d in fitting if d <= FINEST_FOR_LIMITS and _limits_true_at(d, interval)]
     denominator = fine[0] if fine else fitting[0]
@@ -51,9 +51,9 @@ def _true_at(denominator: int, reference: float, index: float, difference: float
     )
 
 
-def _limits_true_at(denominator: int, interval: Interval | Range | Gap) -> bool:
+def _limits_true_at(denominator: int, interval: Interval | Range | Gap | None) -> bool:
     """Whether no limit is rounded to no effect, and the two do not fall together."""
-    if isinstance(interval, Gap):
+    if interval is None or isinstance(interval, Gap):
         return True
     ends = [x for x in (interval.low, interval.high) if not isinstance(x, Gap)]
     rounded = [numbers.people(x, denominator) * (1 if x > 0 else -1) for x in ends]

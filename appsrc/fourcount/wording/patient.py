@@ -95,7 +95,7 @@ def _text_only_denominator(patient: PatientFindings) -> int:
     with_, change = patient.with_.estimate, patient.difference.estimate
     if isinstance(with_, Gap) or isinstance(change, Gap):
         with_, change = without, 0.0
-    return choose(without, with_, change, Gap("follows")).denominator
+    return choose(without, with_, change).denominator
 
 
 def _count(figure: Figure, people: int) -> str:
