@@ -3,7 +3,9 @@
 from __future__ import annotations
 
 import re
+from datetime import date
 from fractions import Fraction
+from html import unescape
 
 import msgspec
 import pytest
@@ -15,7 +17,7 @@ from fourcount.appraisal.findings import Gap
 from fourcount.publish.listing import WIDTH, listing
 from fourcount.publish.plain_text import one_line
 from fourcount.publish.prose import prose
-from fourcount.publish.sheet import HEAD, Row, rows, tsv
+from fourcount.publish.sheet import HEAD, Row, html, rows, tsv
 from fourcount.record.outcome import CELLS, DESIGNS, EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import FAMILIES, Choices, Record
 from fourcount.wording.cautions import STANDING, STANDING_FULL, caution_text
@@ -53,7 +55,7 @@ def outcome_of(counts: tuple[int, ...], *, design: str = "trial", risk: str = ""
 
 def letter(outcome: Outcome, choices: Choices | None = None) -> str:
     record = Record(title_text="A paper", outcomes=(outcome,), choices=choices or Choices())
-    return prose(record, outcome, appraise(outcome, record.choices), version="9.9", date="1 May 2030")
+    return prose(record, outcome, appraise(outcome, record.choices), version="9.9", today=date(2030, 5, 1))
 
 
 def table_of(outcome: Outcome, choices: Choices | None = None) -> tuple[Row, ...]:
@@ -69,11 +71,11 @@ def on_screen(outcome: Outcome, choices: Choices | None = None) -> str:
 def test_a_letter_holds_names_counts_and_origin() -> None:
     """The reader's words, the four counts, version and date are all there."""
     findings = appraise(OUTCOME, RECORD.choices)
-    text = prose(RECORD, OUTCOME, findings, version="9.9", date="1 May 2030")
+    text = prose(RECORD, OUTCOME, findings, version="9.9", today=date(2030, 5, 1))
     for part in ("Falls", RECORD.title_text, RECORD.source_text, "night lights", "38", "374", "70", "339", "12 months"):
         assert part in text
     assert text.rstrip().splitlines()[-1].count("9.9") == 1
-    assert "1 May 2030" in text
+    assert "2030-05-01" in text
 
 
 def test_a_letter_says_the_absolute_first() -> None:
@@ -180,6 +182,17 @@ def test_what_was_typed_cannot_break_out(label: str) -> None:
             assert NUMBER.fullmatch(cell) or not cell.startswith(("=", "+", "-", "@", "\uff1d", '"'))
     for text in (sheet, letter(outcome), on_screen(outcome)):
         assert not re.search("[\x00-\x08\x0b-\x1f\x7f\u202a-\u202e\u2066-\u2069]", text)
+
+
+def test_a_table_of_html_escapes_what_was_typed() -> None:
+    """Markup in a label is text, and the table has the sheet's cells and nothing else."""
+    outcome = outcome_of((38, 374, 70, 339), label='<b onclick="x">&')
+    table = html(outcome, appraise(outcome, Choices()), Choices())
+    assert set(re.findall("<[^>]*>", table)) == {
+        f"<{end}{tag}>" for end in ("", "/") for tag in ("table", "tr", "th", "td")
+    }
+    cells = [unescape(cell) for cell in re.findall("<t[hd]>(.*?)</t[hd]>", table)]
+    assert cells == [cell for row in table_of(outcome) for cell in row]
 
 
 @given(st.text(st.characters(exclude_categories=())))

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Iterable
+from datetime import date
 
 from fourcount.appraisal.findings import Gap, OutcomeFindings, PatientFindings
 from fourcount.publish.plain_text import one_line
@@ -18,13 +19,14 @@ RELATIVE = ("risk_ratio", "odds_ratio")
 MADE_WITH = "Calculated with Fourcount {version} on {date}; {family} intervals at {level}."
 
 
-def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version: str, date: str) -> str:
+def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version: str, today: date) -> str:
     """Names and counts, then absolute before relative figures, the patient, the cautions and where it all comes from.
 
-    ``version`` and ``date`` are written as they are given: this room asks no clock.
+    ``version`` and ``today`` are given by whoever asks: this room looks at no clock.
     """
     choices = record.choices
-    made = MADE_WITH.format(version=version, date=date, family=choices.family, level=numbers.level(choices.level))
+    level = numbers.level(choices.level)
+    made = MADE_WITH.format(version=version, date=today.isoformat(), family=choices.family, level=level)
     paragraphs = [
         one_line(_title(record, outcome)),
         *(one_line(paragraph) for paragraph in _study(outcome, findings, choices)),

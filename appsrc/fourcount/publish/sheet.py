@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from html import escape
 from math import isinf
 
 from fourcount.appraisal.findings import (
@@ -61,6 +62,16 @@ def rows(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple
 def tsv(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     """The rows with tabs between their cells: what a spreadsheet takes from the clipboard."""
     return "".join("\t".join(row) + "\n" for row in rows(outcome, findings, choices))
+
+
+def html(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """The rows as a table of HTML, which a word processor takes from the clipboard; all text is escaped."""
+    head, *body = rows(outcome, findings, choices)
+    return f"<table>{_html_row(head, 'th')}{''.join(_html_row(row, 'td') for row in body)}</table>"
+
+
+def _html_row(row: Row, tag: str) -> str:
+    return f"<tr>{''.join(f'<{tag}>{escape(cell)}</{tag}>' for cell in row)}</tr>"
 
 
 def _counts(outcome: Outcome, counts: Counts | Gap) -> tuple[Row, ...]:
