@@ -7,7 +7,9 @@ from hypothesis import given
 from hypothesis import strategies as st
 
 from fourcount.record.outcome import Outcome, Patient
-from fourcount.wording.patient import DO_NOT_ADD_UP, patient_words
+from fourcount.record.paper import Record
+from fourcount.wording.example import worked_example
+from fourcount.wording.patient import DO_NOT_ADD_UP, patient_words, picture_heading
 
 
 def words_of(outcome, findings_of, denominator=100):
@@ -125,6 +127,15 @@ def test_more_events_are_added(outcome_of, findings_of):
     words = words_of(outcome_of(index_group="second", name_text=""), findings_of)
     assert (words.key_avoided, words.key_added) == ("", "added, on balance")
     assert words.summary_bold == "8 more in 100"
+
+
+def test_a_picture_that_travels_says_what_it_is_about():
+    """Name, title and source, as far as they were typed."""
+    record = worked_example()
+    assert picture_heading(record, record.outcomes[0]) == (
+        "Falls · Night lights on a rehabilitation ward · invented example · table 2"
+    )
+    assert picture_heading(Record(), Outcome()) == ""
 
 
 def test_equal_risks_have_no_key_and_a_range(outcome_of, findings_of):

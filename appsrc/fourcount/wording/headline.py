@@ -27,7 +27,7 @@ class People:
 
 
 def choose(reference: float, index: float, difference: float, interval: Interval | Range | Gap | None = None) -> People:
-    """The smallest denominator at which the sentence says nothing that is not so, of its interval too if one is said."""
+    """The smallest denominator at which the sentence, with its interval if it has one, says only what is so."""
     fitting = [d for d in DENOMINATORS if _true_at(d, reference, index, difference)] or [DENOMINATORS[-1]]
     fine = [d for d in fitting if d <= FINEST_FOR_LIMITS and _limits_true_at(d, interval)]
     denominator = fine[0] if fine else fitting[0]

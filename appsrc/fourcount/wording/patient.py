@@ -6,6 +6,7 @@ from dataclasses import dataclass
 
 from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings, PatientFindings
 from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Record
 from fourcount.wording import limits, names, numbers
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import choose
@@ -76,6 +77,12 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         missing=missing(outcome),
         picture_sentence=_picture_sentence(outcome, patient, people),
     )
+
+
+def picture_heading(record: Record, outcome: Outcome) -> str:
+    """What a picture that travels by itself is about: the outcome's name, the paper's title and where it stands."""
+    parts = (outcome.name_text, record.title_text, record.source_text)
+    return " · ".join(text.strip() for text in parts if text.strip())
 
 
 def missing(outcome: Outcome) -> tuple[str, ...]:
