@@ -17,8 +17,8 @@ GAP_TEXTS = {
     "one-outcome-only": "Everybody in the table had the same outcome, so it does not determine the odds ratio.",
     "zero-width": "The bare formula would give an interval of zero width, which says more than the data can; "
     "the score intervals give a real one.",
-    "beyond-one": "The risk would pass 100% here; the odds ratio can be carried instead.",
-    "beyond-zero": "The risk would fall below 0% here; the odds ratio can be carried instead.",
+    "beyond-one": "The risk would pass 100% here; where a risk ratio is carried, the odds ratio can be carried instead.",
+    "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     # the design, the table, the patient
     "not-typed": "Type the four counts of the table.",
     "unreadable": "A cell of the table cannot be read as a count; the mark beside it says why.",

@@ -15,6 +15,7 @@ LONGEST_KEY = 40
 NOT_GIVEN = "not given"
 TOO_SMALL = "too small to draw"
 WHICH_PEOPLE = "We cannot say which people."
+CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
 DO_NOT_ADD_UP = "Whole numbers are rounded, so they need not add up."
 
 
@@ -187,10 +188,9 @@ def _summary(outcome: Outcome, patient: PatientFindings, people: int) -> str:
 def _detail(patient: PatientFindings, people: int) -> str:
     """What stands under the summary: number needed, relative words, and what the range leaves out."""
     if isinstance(patient.with_.estimate, Gap):
-        return gap_text(patient.with_.estimate)
+        return _reason(patient.with_.estimate, patient)
     sentences = [_number_needed(patient.number_needed), _relative(patient.risk_ratio)]
-    for figure in (patient.with_, patient.difference):
-        sentences += [gap_text(gap) for gap in _gaps(figure)]
+    sentences += [_reason(gap, patient) for gap in _gaps(patient.difference)]
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
         sentences.append(f"The range leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
     if not _adds_up(patient, people):
@@ -215,6 +215,12 @@ def _relative(ratio: Figure) -> str:
     word = limits.LOWER if change < 0 else limits.HIGHER
     interval = limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
     return f"In relative words {numbers.percent_whole(abs(change))} {word}{interval}."
+
+
+def _reason(gap: Gap, patient: PatientFindings) -> str:
+    """Why something is withheld here; where a carried risk ratio passes 100%, odds never do."""
+    passes = gap.key == "beyond-one" and patient.range_from == "effect"
+    return CARRY_THE_ODDS if passes else gap_text(gap)
 
 
 def _gaps(figure: Figure) -> tuple[Gap, ...]:
@@ -244,7 +250,8 @@ def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -
         f"{names.event_words(outcome)}{f' {span}' if span else ''} and {_others(patient.without, people, outcome)}"
     )
     if isinstance(patient.with_.estimate, Gap):
-        return f"{first}. {names.sentence_case(names.in_group(outcome, 'index'))}: {gap_text(patient.with_.estimate)}"
+        reason = _reason(patient.with_.estimate, patient)
+        return f"{first}. {names.sentence_case(names.in_group(outcome, 'index'))}: {reason}"
     second = (
         f"of {all_people} {names.in_group(outcome, 'index')} {_affected(patient.with_, people)} "
         f"{names.event_words(outcome)} and {_others(patient.with_, people, outcome)}"
