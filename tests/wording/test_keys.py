@@ -55,6 +55,13 @@ def test_every_reason_for_no_figure_has_a_sentence(key):
     assert text[0].isupper()
 
 
+def test_no_sentence_outlives_its_reason():
+    """Every sentence belongs to a key that can still occur."""
+    assert set(gaps.GAP_TEXTS) == {*GAP_KEYS, *APPRAISAL_KEYS}
+    assert set(gaps.MARK_TEXTS) == set(MARK_KEYS)
+    assert set(cautions.TEXTS) == {rule.key for rule in CAUTIONS}
+
+
 @pytest.mark.parametrize("key", MARK_KEYS)
 def test_every_mark_quotes_what_was_typed_and_says_what_is_wrong(key):
     """``-3: a count cannot be negative``."""
