@@ -31,10 +31,10 @@ def test_a_flat_stretch_before_the_root_is_crossed() -> None:
     assert found == pytest.approx(1e9 + 4.0, rel=1e-15)
 
 
-def test_a_wrong_slope_costs_steps_only() -> None:
-    """Newton steps that do not shrink give way to halving."""
-    found = increasing_root(lambda x: (x - 0.3, 1e-3), 0.0, 1.0, 0.9)
-    assert found == pytest.approx(0.3, rel=1e-14)
+@pytest.mark.parametrize("slope", [1e-3, 0.5, 100.0])
+def test_a_wrong_slope_costs_steps_only(slope: float) -> None:
+    """Steps that leave the bracket, go to and fro or creep give way to halving."""
+    assert increasing_root(lambda x: (x - 0.3, slope), 0.0, 1.0, 0.9) == pytest.approx(0.3, rel=1e-12)
 
 
 def test_an_infinite_value_tells_only_the_side() -> None:
@@ -49,3 +49,8 @@ def test_an_infinite_value_tells_only_the_side() -> None:
 def test_a_root_that_is_met_exactly_is_returned_at_once() -> None:
     """No step follows a value of exactly 0."""
     assert increasing_root(lambda x: (x - 0.5, 1.0), 0.0, 1.0, 0.5) == 0.5
+
+
+def test_a_root_far_below_its_bracket_is_reached() -> None:
+    """1e-250 between 0 and 1, without a slope: halving alone gets there."""
+    assert increasing_root(lambda x: (x - 1e-250, 0.0), 0.0, 1.0, 0.5) == pytest.approx(1e-250, rel=1e-14)

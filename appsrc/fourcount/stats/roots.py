@@ -8,13 +8,14 @@ Curve = Callable[[float], tuple[float, float]]
 """A function's value and slope at a point."""
 
 _CLOSE = 4.0 * 2.0**-52
-_MOST_STEPS = 400  # halving alone, in a bracket of 1e-300 to 1e300, is over sooner than this
+_MOST_STEPS = 5000  # more than it takes to halve down to any double from any other
 
 
 def increasing_root(curve: Curve, low: float, high: float, start: float) -> float:
     """Where an increasing curve passes 0, to the last few bits.
 
-    The root lies between ``low`` and ``high``; neither end is evaluated, so the curve may be infinite there.
+    The root lies between ``low`` and ``high``; neither end is evaluated, so the curve may be infinite there. A rough
+    slope costs steps, and a slope of 0 stands for "not known"; only the last step takes the slope's size on trust.
     Newton's method, with the bracket drawn in at each step; a step that leaves the bracket, or that is not less
     than half of the last but one, gives way to halving the bracket (the safeguard of Dekker and Brent: Brent 1973,
     Algorithms for Minimization without Derivatives, chapter 4).
