@@ -291,35 +291,6 @@ def test_an_environment_whose_python_is_gone_is_stale(setup: ModuleType, made: C
     assert not setup.is_ready(setup.TO_RUN, folder)
 
 
-def pins(lock: Path) -> dict[str, list[str]]:
-    """Each pinned line with its hashes."""
-    found: dict[str, list[str]] = {}
-    name = ""
-    for line in lock.read_text(encoding="ascii").splitlines():
-        if line.startswith(" "):
-            found[name].append(line.strip(" \\"))
-        else:
-            name = line.strip(" \\")
-            found[name] = []
-    return found
-
-
-def test_both_locks_agree(setup: ModuleType) -> None:
-    """Everything locked for running is locked for testing in the same version, and all of it by hash."""
-    to_run, to_test = pins(setup.TO_RUN), pins(setup.TO_TEST)
-    assert to_run.keys() <= to_test.keys()
-    assert all(to_test[name] == hashes for name, hashes in to_run.items())
-    assert all(to_test.values())
-
-
-def test_no_lock_names_a_registry(setup: ModuleType) -> None:
-    """A lock holds versions and hashes only; where to fetch from is the machine's affair."""
-    for lock in (setup.TO_RUN, setup.TO_TEST):
-        text = lock.read_text(encoding="ascii")
-        assert "://" not in text
-        assert "--index" not in text
-
-
 @pytest.mark.parametrize(
     ("line", "counts"),
     [
