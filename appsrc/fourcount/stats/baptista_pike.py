@@ -21,7 +21,8 @@ from functools import partial
 
 import numpy as np
 
-from fourcount.stats.hypergeometric import Array, Window, product_sum, support, undetermined
+from fourcount.stats.estimates import without_people
+from fourcount.stats.hypergeometric import Array, Window, product_sum, support
 from fourcount.stats.results import Counts, Gap, Interval
 from fourcount.stats.tails import first_guess, rising_root, widened
 
@@ -37,7 +38,7 @@ def baptista_pike_mid_p(counts: Counts, level: float) -> Interval | Gap:
 
 
 def _interval(counts: Counts, level: float, own: float) -> Interval | Gap:
-    gap = undetermined(counts)
+    gap = without_people(counts)
     if gap is not None:
         return gap
     least, greatest = support(counts)

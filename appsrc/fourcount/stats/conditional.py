@@ -15,8 +15,9 @@ from functools import partial
 import numpy as np
 
 from fourcount.stats.baptista_pike import baptista_pike, baptista_pike_mid_p
+from fourcount.stats.estimates import without_people
 from fourcount.stats.fisher import fisher, fisher_greater, fisher_less, fisher_mid_p
-from fourcount.stats.hypergeometric import Array, Window, product_sum, support, undetermined, window
+from fourcount.stats.hypergeometric import Array, Window, product_sum, support, window
 from fourcount.stats.results import Counts, Gap, Interval
 from fourcount.stats.tails import odds_ratio_at_tail, rising_root
 
@@ -45,7 +46,7 @@ def conditional_mid_p(counts: Counts, level: float) -> Interval | Gap:
 
 def conditional_odds_ratio(counts: Counts) -> float | Gap:
     """The conditional maximum likelihood estimate of the odds ratio; 0 or infinite at the support's ends."""
-    gap = undetermined(counts)
+    gap = without_people(counts)
     if gap is not None:
         return gap
     least, greatest = support(counts)
@@ -60,7 +61,7 @@ def conditional_odds_ratio(counts: Counts) -> float | Gap:
 
 
 def _interval(counts: Counts, level: float, own: float) -> Interval | Gap:
-    gap = undetermined(counts)
+    gap = without_people(counts)
     if gap is not None:
         return gap
     least, greatest = support(counts)

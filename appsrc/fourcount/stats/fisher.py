@@ -12,7 +12,8 @@ from __future__ import annotations
 import math
 
 from fourcount.stats.central import log_probability, moved, tail
-from fourcount.stats.hypergeometric import support, undetermined
+from fourcount.stats.estimates import without_people
+from fourcount.stats.hypergeometric import support
 from fourcount.stats.results import Counts, Gap
 
 _TIE = math.log1p(1e-7)
@@ -20,22 +21,22 @@ _TIE = math.log1p(1e-7)
 
 def fisher(counts: Counts) -> float | Gap:
     """Fisher's two-sided p."""
-    return undetermined(counts) or min(1.0, _unlikely(counts))
+    return without_people(counts) or min(1.0, _unlikely(counts))
 
 
 def fisher_mid_p(counts: Counts) -> float | Gap:
     """Fisher's two-sided p less half the observed table's own probability; tables tied with it count in full."""
-    return undetermined(counts) or min(1.0, _unlikely(counts)) - math.exp(log_probability(counts)) / 2
+    return without_people(counts) or min(1.0, _unlikely(counts)) - math.exp(log_probability(counts)) / 2
 
 
 def fisher_greater(counts: Counts) -> float | Gap:
     """One-sided: the probability of as many index events, or more."""
-    return undetermined(counts) or _beyond(counts, 1)
+    return without_people(counts) or _beyond(counts, 1)
 
 
 def fisher_less(counts: Counts) -> float | Gap:
     """One-sided: the probability of as many index events, or fewer."""
-    return undetermined(counts) or _beyond(counts, -1)
+    return without_people(counts) or _beyond(counts, -1)
 
 
 def _beyond(counts: Counts, away: int) -> float:

@@ -16,7 +16,7 @@ from functools import lru_cache
 import numpy as np
 from numpy.typing import NDArray
 
-from fourcount.stats.results import Counts, Gap
+from fourcount.stats.results import Counts
 
 Array = NDArray[np.float64]
 
@@ -100,17 +100,6 @@ def support(counts: Counts) -> tuple[int, int]:
         -min(counts.index_events, counts.reference_non_events),
         min(counts.index_non_events, counts.reference_events),
     )
-
-
-def undetermined(counts: Counts) -> Gap | None:
-    """The reason for which the table says nothing of an odds ratio: a group with nobody in it."""
-    if counts.total == 0:
-        return Gap("empty-table")
-    if counts.index_total == 0:
-        return Gap("empty-index-group")
-    if counts.reference_total == 0:
-        return Gap("empty-reference-group")
-    return None
 
 
 @lru_cache(maxsize=2)
