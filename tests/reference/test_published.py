@@ -11,7 +11,7 @@ import math
 from collections.abc import Callable, Mapping
 from pathlib import Path
 from statistics import NormalDist
-from typing import Any
+from typing import Any, Literal
 
 import pytest
 
@@ -121,7 +121,7 @@ def _chi_square(entry: dict[str, Any]) -> Figures:
     return {"chi2": NormalDist().inv_cdf(p / 2) ** 2}
 
 
-def _carried(effect: str, key: str) -> Callable[[dict[str, Any]], Figures]:
+def _carried(effect: Literal["risk_ratio", "odds_ratio"], key: str) -> Callable[[dict[str, Any]], Figures]:
     """Fewer per 1000 and the number needed, rounded up, of an effect at an assumed risk."""
 
     def figures(entry: dict[str, Any]) -> Figures:
@@ -258,7 +258,7 @@ def _agrees_in_print(figure: dict[str, Any], value: float) -> bool:
         return value < 0
     if "tolerance" not in figure:  # figures below the normal doubles have a relative one
         return math.isclose(value, float(figure["printed"]), rel_tol=1e-8, abs_tol=5e-324)
-    return abs(value - float(figure["printed"])) <= figure["tolerance"] * (1 + 1e-9)
+    return abs(value - float(figure["printed"])) <= float(figure["tolerance"]) * (1 + 1e-9)
 
 
 @pytest.mark.parametrize("key", [key for key in ENTRIES if key not in SKIPPED])

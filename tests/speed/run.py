@@ -180,7 +180,8 @@ def main() -> int:
         compileall.compile_dir(folder, quiet=2)
     names = ("PySide6-Essentials", "numpy", "scipy", "statsmodels")
     print(f"Python {platform.python_version()}, {', '.join(f'{name} {version(name)}' for name in names)}")
-    print(f"{os.cpu_count()} processors, Qt on {options.platform}, medians of {options.runs}")
+    load = f"load {os.getloadavg()[0]:.1f} at the start"
+    print(f"{os.cpu_count()} processors, {load}, Qt on {options.platform}, medians of {options.runs}")
     children = Children(options.runs, options.platform)
     met = True
     for name, measure in MEASUREMENTS.items():

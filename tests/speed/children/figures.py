@@ -13,6 +13,8 @@ import time
 import warnings
 from collections.abc import Callable
 
+from fourcount.stats.results import Counts, Interval
+
 Table = tuple[int, int, int, int]
 LEVEL = 0.95
 
@@ -38,9 +40,7 @@ def seconds(work: Callable[[Table], object], items: list[Table]) -> list[float]:
     return times
 
 
-def _counts(table: Table) -> object:
-    from fourcount.stats.results import Counts
-
+def _counts(table: Table) -> Counts:
     return Counts(
         index_events=table[0],
         index_non_events=table[1],
@@ -113,8 +113,10 @@ def conditional(table: Table) -> tuple[float, float, float]:
     from fourcount.stats.conditional import conditional_exact, conditional_odds_ratio
 
     counts = _counts(table)
-    interval = conditional_exact(counts, LEVEL)
-    return conditional_odds_ratio(counts), interval.low, interval.high
+    interval, estimate = conditional_exact(counts, LEVEL), conditional_odds_ratio(counts)
+    assert isinstance(interval, Interval)
+    assert isinstance(estimate, float)
+    return estimate, interval.low, interval.high
 
 
 def scipy_conditional(table: Table) -> tuple[float, float, float]:
