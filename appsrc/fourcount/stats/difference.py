@@ -4,7 +4,7 @@ from __future__ import annotations
 
 import math
 
-from fourcount.stats.estimates import without_people
+from fourcount.stats.estimates import difference_of_risks, without_people
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import Counts, Gap, Interval
 from fourcount.stats.risk import score_limits
@@ -46,12 +46,7 @@ def wald(counts: Counts, level: float) -> Interval | Gap:
     gap = without_people(counts)
     if gap is not None:
         return gap
-    if 0 in (counts.index_events, counts.index_non_events) and 0 in (
-        counts.reference_events,
-        counts.reference_non_events,
-    ):
-        return Gap("zero-width")
-    return _plain(counts, level)
+    return _plain(counts, level) if _plain_variance(counts) > 0.0 else Gap("zero-width")
 
 
 def agresti_caffo(counts: Counts, level: float) -> Interval | Gap:
@@ -71,16 +66,14 @@ def agresti_caffo(counts: Counts, level: float) -> Interval | Gap:
     return _plain(added, level)
 
 
-def _estimate(counts: Counts) -> float:
-    across = counts.index_events * counts.reference_total - counts.reference_events * counts.index_total
-    return across / (counts.index_total * counts.reference_total)
+def _plain_variance(counts: Counts) -> float:
+    index = counts.index_events * counts.index_non_events / counts.index_total**3
+    return index + counts.reference_events * counts.reference_non_events / counts.reference_total**3
 
 
 def _plain(counts: Counts, level: float) -> Interval:
-    index = counts.index_events * counts.index_non_events / counts.index_total**3
-    reference = counts.reference_events * counts.reference_non_events / counts.reference_total**3
-    half_width = quantile(level) * math.sqrt(index + reference)
-    estimate = _estimate(counts)
+    half_width = quantile(level) * math.sqrt(_plain_variance(counts))
+    estimate = difference_of_risks(counts)
     return Interval(low=estimate - half_width, high=estimate + half_width)
 
 
@@ -91,7 +84,7 @@ def _square_and_add(counts: Counts, level: float, *, correction: float) -> Inter
     z = quantile(level)
     index_below, index_above = _distances(counts.index_events, counts.index_total, z, correction)
     reference_below, reference_above = _distances(counts.reference_events, counts.reference_total, z, correction)
-    estimate = _estimate(counts)
+    estimate = difference_of_risks(counts)
     return Interval(
         low=estimate - math.hypot(index_below, reference_above),
         high=estimate + math.hypot(index_above, reference_below),
@@ -140,14 +133,13 @@ def _lower(counts: Counts, reach: float) -> float:
     while curve(high)[0] < 0.0:
         low, high = high, 2.0 * high
     u = increasing_root(curve, low, high, _first_guess(counts, reach))
-    return max(_estimate(counts) - reach * reach / u, -1.0)  # only the last bit can lie beyond -1
+    return max(difference_of_risks(counts) - reach * reach / u, -1.0)  # only the last bit can lie beyond -1
 
 
 def _first_guess(counts: Counts, reach: float) -> float:
     """The multiplier if the fitted risks stayed where the estimates are; infinite where both of those are 0 or 1."""
-    index = counts.index_events * counts.index_non_events / counts.index_total**3
-    reference = counts.reference_events * counts.reference_non_events / counts.reference_total**3
-    return reach / math.sqrt(index + reference) if index + reference > 0.0 else math.inf
+    variance = _plain_variance(counts)
+    return reach / math.sqrt(variance) if variance > 0.0 else math.inf
 
 
 def _statistic(counts: Counts, u: float) -> tuple[float, float]:

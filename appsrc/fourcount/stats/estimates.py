@@ -34,10 +34,13 @@ def odds(events: int, total: int) -> float | Gap:
 
 
 def risk_difference(counts: Counts) -> float | Gap:
-    """The index group's risk minus the reference group's, rounded once from the exact fraction."""
+    """The index group's risk minus the reference group's."""
     gap = without_people(counts)
-    if gap is not None:
-        return gap
+    return difference_of_risks(counts) if gap is None else gap
+
+
+def difference_of_risks(counts: Counts) -> float:
+    """The risk difference of two groups with somebody in each, rounded once from the exact fraction."""
     across = counts.index_events * counts.reference_total - counts.reference_events * counts.index_total
     return across / (counts.index_total * counts.reference_total)
 
