@@ -121,9 +121,9 @@ def test_exact_limits_are_the_known_ones(table: Table, level: float, low: float,
 
 
 def test_mid_p_limits_are_the_printed_ones() -> None:
-    """7/34 against 1/34: 1.19 to 200, Fagerland, Lydersen and Laake 2015, Stat Methods Med Res 24:224 (Cornfield mid-P).
+    """7/34 against 1/34, mid-P ("Cornfield mid-P"): 1.19 to 200.
 
-    The figures are as the tests of statsmodels 0.15 quote them.
+    Fagerland, Lydersen and Laake 2015, Stat Methods Med Res 24:224, as the tests of statsmodels 0.15 quote it.
     """
     found = interval(conditional_mid_p(counts((7, 27, 1, 33)), 0.95))
     assert found.low == pytest.approx(1.19, abs=0.005)
