@@ -41,10 +41,10 @@ def fisher_less(counts: Counts) -> float | Gap:
 
 def _beyond(counts: Counts, away: int) -> float:
     """The probability of this table and those beyond it: summed where they fall, else by what is left."""
-    if _side(counts) in (0, away):
-        return _times(tail(counts, away), log_probability(counts))
     if _ends(counts, -away):
         return 1.0
+    if _side(counts) in (0, away):
+        return min(1.0, _times(tail(counts, away), log_probability(counts)))
     before = moved(counts, -away)
     return 1.0 - _times(tail(before, -away), log_probability(before))
 
