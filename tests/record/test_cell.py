@@ -45,6 +45,7 @@ WITH_MORE = [
     ("38 (9,2 %)", 38, None, "9,2 %"),
     ("38 (9\u00b72)", 38, None, "9\u00b72"),
     ("38(<10%)", 38, None, "<10%"),
+    ("38 (100.0%)", 38, None, "100.0%"),
     ("38/412 (9.2%)", 38, 412, "9.2%"),
     ("1,204 of 2,408 (50%)", 1204, 2408, "50%"),
 ]
@@ -65,7 +66,9 @@ REFUSED = [
     ("3\u200f8", "not-a-count"),
     ("\u202e38", "not-a-count"),
     ("3\u0968", "not-a-count"),
-    ("38 (104%)", "not-a-count"),
+    ("38 (100.1%)", "not-a-count"),
+    ("0" * 500, "not-a-count"),
+    ("x" * 500, "not-a-count"),
     ("38 (p=0.2)", "not-a-count"),
     ("38/412/5", "not-a-count"),
     ("38%", "not-a-count"),
@@ -134,6 +137,15 @@ def test_what_was_typed_is_quoted_short_and_on_one_line() -> None:
     quoted = str(reading.facts["text"])
     assert quoted.startswith("people who fell \ufffd \ufffd \ufffd x")
     assert len(quoted) == 40
+
+
+def test_a_reason_tells_what_its_sentence_needs() -> None:
+    """A count that is too large says up to where counts go; events above a total say both numbers."""
+    too_large, above = read_cell("1,000,000,001"), read_cell("412/38")
+    assert isinstance(too_large, Unreadable)
+    assert isinstance(above, Unreadable)
+    assert too_large.facts == {"text": "1,000,000,001", "limit": 10**9}
+    assert above.facts == {"text": "412/38", "events": 412, "total": 38}
 
 
 @given(ANY_TEXT | NEARLY_A_COUNT)

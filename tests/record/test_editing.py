@@ -174,7 +174,8 @@ def test_choices_take_only_what_there_is() -> None:
 
 def test_a_level_stays_within_its_range() -> None:
     """A level from 80% to 99.9% is taken as it is; any other is refused."""
-    assert editing.with_level(RECORD, 0.999).choices == Choices(level=0.999)
+    for level in (0.80, 0.999):
+        assert editing.with_level(RECORD, level).choices == Choices(level=level)
     for wrong in (0.79, 1.0, 95, float("nan")):
         with pytest.raises(ValueError, match="level"):
             editing.with_level(RECORD, wrong)
@@ -184,6 +185,7 @@ def test_one_outcome_of_a_record_is_replaced() -> None:
     """The outcome at its place changes, its neighbours stay."""
     new = editing.with_design(OUTCOME, "survey")
     assert editing.with_outcome(RECORD, 1, new).outcomes == (OUTCOME, new)
+    assert editing.with_outcome(RECORD, 0, new).outcomes == (new, Outcome())
     assert changed(RECORD, editing.with_outcome(RECORD, 0, new)) == {"outcomes"}
     for place in (-1, 2):
         with pytest.raises(IndexError):

@@ -114,6 +114,16 @@ def test_a_row_of_a_total_goes_on_beside_a_mark(
     assert marks(reading) == marked
 
 
+@pytest.mark.parametrize("form", [EventsAndOthers, EventsOfTotal])
+def test_the_second_group_is_marked_like_the_first(form: type[EventsAndOthers] | type[EventsOfTotal]) -> None:
+    """A percentage that disagrees is marked in either group, in either form."""
+    table = form(
+        first_left_text="38 (1%)", first_right_text="412", second_left_text="70 (1%)", second_right_text="408 (1%)"
+    )
+    expected = ["first_left_text", "second_left_text"] + ["second_right_text"] * (form is EventsAndOthers)
+    assert marks(read_table(table)) == [(field, "percent-disagrees", True) for field in expected]
+
+
 def test_a_percentage_may_be_of_the_column() -> None:
     """A percentage of all cases, as case-control studies print it, is not marked."""
     reading = others("30 (30%)", "374")
