@@ -38,7 +38,7 @@ def risk_with(effect: Effect, value: float, baseline: float) -> float | Gap:
     risk = value * baseline
     if risk <= 1.0:
         return risk
-    # 100% itself can come out a last bit above 1, as in (1 / 0.12) times 0.12 on another scale.
+    # 100% itself can come out a last bit above 1: 11/9 times 9/11 does.
     return 1.0 if risk <= 1.0 + _ROUNDING else Gap("beyond-one")
 
 
