@@ -39,7 +39,7 @@ class AsPrinted(QWidget):
         self._look = look
         self.design = ChoiceField(look, labels.FIELDS["design"], tuple(labels.DESIGNS.items()))
         self.event_words = TextField(look, "left_words_text", labels.FIELDS["left_words_text"], labels.HINTS["words"])
-        self.welcome = ChoiceField(look, labels.FIELDS["welcome"], tuple(labels.WELCOME.items()))
+        self.welcome = ChoiceField(look, labels.FIELDS["welcome"], tuple(labels.WELCOME.items()), whole=True)
         self.span = TextField(look, "span_text", labels.FIELDS["span_text"], labels.HINTS["span_text"])
         self.form = ChoiceField(look, labels.FIELDS["form"], tuple(labels.FORMS.items()))
         self.layout_choice = ChoiceField(look, labels.FIELDS["layout"], tuple(labels.LAYOUTS.items()))
@@ -76,8 +76,7 @@ class AsPrinted(QWidget):
     def _build(self) -> None:
         self._form_rows = QGridLayout()
         self._form_rows.setContentsMargins(0, 0, 0, 0)
-        self._form_rows.setColumnStretch(1, 3)
-        self._form_rows.setColumnStretch(2, 2)
+        self._form_rows.setColumnStretch(1, 1)
         names = ("design", "left_words_text", "span_text", "form")
         for row, name in enumerate(names):
             self._form_rows.addWidget(Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False), row, 0)
@@ -87,8 +86,8 @@ class AsPrinted(QWidget):
         self._form_rows.addWidget(self.span, 2, 1, 1, 2)
         printed = QHBoxLayout()
         printed.addWidget(self.form, 3)
-        printed.addWidget(Words(self._look, "body", "muted", labels.FIELDS["layout"].lower(), wraps=False))
-        printed.addWidget(self.layout_choice, 2)
+        printed.addWidget(self.layout_choice, 3)
+        printed.setSpacing(12)
         self._form_rows.addLayout(printed, 3, 1, 1, 2)
         links = FlowLayout(self._look)
         for link in self.links:

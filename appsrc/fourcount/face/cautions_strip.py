@@ -4,64 +4,103 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QEvent, QSize, Qt
-from PySide6.QtGui import QPainter, QPaintEvent
-from PySide6.QtWidgets import QFrame, QHBoxLayout, QScrollArea, QSizePolicy, QVBoxLayout, QWidget
+from PySide6.QtCore import QSize, Qt
+from PySide6.QtGui import QFocusEvent, QPainter, QPaintEvent, QPen, QResizeEvent
+from PySide6.QtWidgets import QFrame, QScrollArea, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
-from fourcount.face.text import Words
+from fourcount.face.scroll_bar import ScrollBar
+from fourcount.ink.typeset import draw_text, text_height, text_width
 from fourcount.wording import labels
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
 
-HIGHEST_SHARE = 0.28
+HIGHEST_SHARE = 0.26
 """The largest share of the window's height that the strip takes before it scrolls."""
 
 
-class CautionLine(QWidget):
-    """One caution behind a bar in the caution's colour."""
+class CautionsText(QWidget):
+    """The cautions, each behind a bar in the caution's colour, and the standing block under them."""
 
-    def __init__(self, look: Look) -> None:
+    def __init__(self, look: Look, standing: str, strip: QWidget) -> None:
         super().__init__()
         self._look = look
-        self.words = Words(look, selectable=True)
-        self.words.setFocusPolicy(Qt.FocusPolicy.ClickFocus)
-        layout = QHBoxLayout(self)
-        layout.setContentsMargins(12, 0, 0, 0)
-        layout.addWidget(self.words)
+        self._standing = standing
+        self._strip = strip
+        self.texts: tuple[str, ...] = ()
+        policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
+        policy.setHeightForWidth(True)
+        self.setSizePolicy(policy)
+
+    def hasHeightForWidth(self) -> bool:
+        return True
+
+    def heightForWidth(self, width: int) -> int:
+        return round(self._run(None, width))
+
+    def sizeHint(self) -> QSize:
+        return QSize(self._look.px(400), self.heightForWidth(max(self.width(), 1)))
+
+    def minimumSizeHint(self) -> QSize:
+        return QSize(0, 0)
 
     def paintEvent(self, event: QPaintEvent) -> None:
         painter = QPainter(self)
-        painter.fillRect(0, 1, 3, self.height() - 2, self._look.colour("caution"))
+        self._run(painter, self.width())
+        painter.fillRect(0, 0, self.width(), 1, self._look.colour("hairline"))
+        if self._strip.hasFocus():
+            painter.setPen(QPen(self._look.colour("accent"), 1, Qt.PenStyle.DotLine))
+            painter.drawRect(self.rect().adjusted(1, 1, -2, -2))
         painter.end()
+
+    def _run(self, painter: QPainter | None, width: int) -> float:
+        """Walk down the strip and give its height; without a painter only measure."""
+        look, colours = self._look, self._look.palette
+        px, margin, y = look.px, look.px(24), float(look.px(11))
+        head = labels.COLUMNS["cautions"].upper()
+        beside = width >= px(700)
+        x = margin + max(px(104), text_width(head, look.font("head")) + px(16)) if beside else float(margin)
+        if painter:
+            draw_text(painter, margin, y + px(1), width, head, look.font("head"), colours.muted)
+        if not beside:
+            y += text_height(head, look.font("head"), width) + px(6)
+        for text in self.texts:
+            tall = text_height(text, look.font("body"), width - x - margin - px(13))
+            if painter:
+                painter.fillRect(round(x), round(y), 3, round(tall), look.colour("caution"))
+                draw_text(painter, x + px(13), y, width - x - margin - px(13), text, look.font("body"), colours.ink)
+            y += tall + px(5)
+        room = width - x - margin
+        y += px(1)
+        if painter:
+            draw_text(painter, x, y, room, self._standing, look.font("small"), colours.muted)
+        return y + text_height(self._standing, look.font("small"), room) + px(11)
 
 
 class CautionsStrip(QScrollArea):
-    """The cautions of the outcome in view above the block that always stands; scrolls where it would grow too tall."""
+    """The strip as one accessible text; it scrolls, by keyboard too, where it would grow too tall."""
 
     def __init__(self, look: Look, standing: str) -> None:
         super().__init__()
         self._look = look
-        self._lines: list[CautionLine] = []
-        self._texts: tuple[str, ...] = ()
-        self.standing = Words(look, "small", "muted", standing)
+        self._standing = standing
+        self._inside = CautionsText(look, standing, self)
         self.setFrameShape(QFrame.Shape.NoFrame)
         self.setWidgetResizable(True)
+        self.setVerticalScrollBar(ScrollBar(look))
         self.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
         self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
-        self.setFocusPolicy(Qt.FocusPolicy.NoFocus)
+        self.setFocusPolicy(Qt.FocusPolicy.TabFocus)
         self.setAccessibleName(labels.COLUMNS["cautions"])
-        self._inside = QWidget()
-        self._row = QHBoxLayout(self._inside)
-        self._head = Words(look, "head", "muted", labels.COLUMNS["cautions"].upper(), wraps=False)
-        self._row.addWidget(self._head, 0, Qt.AlignmentFlag.AlignTop)
-        self._column = QVBoxLayout()
-        self._column.addWidget(self.standing)
-        self._row.addLayout(self._column, 1)
+        self.setAccessibleDescription(standing)
         self.setWidget(self._inside)
-        look.changed.connect(self._on_look_changed)
-        self._on_look_changed()
+        look.changed.connect(self.fit)
+
+    @property
+    def texts(self) -> tuple[str, ...]:
+        """The cautions on screen, without the standing block."""
+        return self._inside.texts
 
     def show_state(self, findings: OutcomeFindings | None) -> None:
         """Show a line for each caution that holds."""
@@ -70,43 +109,28 @@ class CautionsStrip(QScrollArea):
             from fourcount.wording.cautions import caution_text
 
             texts = tuple(caution_text(caution) for caution in findings.cautions)
-        if texts == self._texts:
-            return
-        self._texts = texts
-        while len(self._lines) < len(texts):
-            line = CautionLine(self._look)
-            self._lines.append(line)
-            self._column.insertWidget(len(self._lines) - 1, line)
-        for i, line in enumerate(self._lines):
-            line.words.show_words(texts[i] if i < len(texts) else "")
-            line.setVisible(i < len(texts))
-        self.fit()
+        if texts != self._inside.texts:
+            self._inside.texts = texts
+            self.setAccessibleDescription(" ".join((*texts, self._standing)))
+            self.fit()
 
     def fit(self) -> None:
         """Take the height that the text needs, up to a share of the window's."""
-        window = self.window()
-        width = max(self.viewport().width(), 1)
-        needed = self._inside.layout().heightForWidth(width) if self._inside.layout().hasHeightForWidth() else 0
-        highest = int(window.height() * HIGHEST_SHARE)
-        self.setFixedHeight(min(max(needed, self._look.px(48)), max(highest, self._look.px(64))))
+        needed = self._inside.heightForWidth(max(self.viewport().width(), 200)) + 1
+        highest = max(int(self.window().height() * HIGHEST_SHARE), self._look.px(56))
+        if self.height() != min(needed, highest):
+            self.setFixedHeight(min(needed, highest))
+        self._inside.updateGeometry()
+        self._inside.update()
 
-    def sizeHint(self) -> QSize:
-        return QSize(self._look.px(600), self.height())
-
-    def paintEvent(self, event: QPaintEvent) -> None:
-        super().paintEvent(event)
-        painter = QPainter(self.viewport())
-        painter.fillRect(0, 0, self.viewport().width(), 1, self._look.colour("hairline"))
-        painter.end()
-
-    def event(self, event: QEvent) -> bool:
-        if event.type() == QEvent.Type.Resize:
-            self.fit()
-        return super().event(event)
-
-    def _on_look_changed(self) -> None:
-        px = self._look.px
-        self._row.setContentsMargins(px(24), px(10), px(24), px(10))
-        self._row.setSpacing(px(32))
-        self._column.setSpacing(px(4))
+    def resizeEvent(self, event: QResizeEvent) -> None:
+        super().resizeEvent(event)
         self.fit()
+
+    def focusInEvent(self, event: QFocusEvent) -> None:
+        super().focusInEvent(event)
+        self._inside.update()
+
+    def focusOutEvent(self, event: QFocusEvent) -> None:
+        super().focusOutEvent(event)
+        self._inside.update()

@@ -2,70 +2,115 @@
 
 from __future__ import annotations
 
-from PySide6.QtCore import Qt
-from PySide6.QtGui import QPainter, QPaintEvent, QResizeEvent
-from PySide6.QtWidgets import QFrame, QGridLayout, QScrollArea, QWidget
+from typing import NamedTuple
+
+from PySide6.QtCore import QRect, QSize, Qt
+from PySide6.QtGui import QPainter, QPaintEvent
+from PySide6.QtWidgets import QFrame, QLayout, QLayoutItem, QScrollArea, QWidget
 
 from fourcount.face.look import Look
+from fourcount.face.scroll_bar import ScrollBar
 
-THREE_FROM = 1200
-TWO_FROM = 900
-"""Widths of the window, at 100% text, from which three columns or two stand side by side."""
+THREE_FROM = 1150
+TWO_FROM = 880
+"""Widths of the page, at 100% text, from which three columns or two stand side by side."""
+
+
+class Arrangement(NamedTuple):
+    """Which columns (0 printed, 1 says, 2 patient) are stacked in each pillar, and the pillars' shares of the width."""
+
+    pillars: tuple[tuple[int, ...], ...]
+    shares: tuple[int, ...]
+
+
+THREE = Arrangement(((0,), (1,), (2,)), (385, 506, 389))
+TWO = Arrangement(((0, 2), (1,)), (430, 560))
+ONE = Arrangement(((0, 1, 2),), (1,))
+
+
+class ColumnsLayout(QLayout):
+    """Three items in pillars; each is as tall as its width asks for, and the last of a pillar takes the rest."""
+
+    def __init__(self, look: Look, parent: QWidget) -> None:
+        super().__init__(parent)
+        self._look = look
+        self._items: list[QLayoutItem] = []
+        self.setContentsMargins(0, 0, 0, 0)
+
+    def arrangement(self, width: int) -> Arrangement:
+        """The arrangement that a width has room for."""
+        room = width / self._look.zoom
+        return THREE if room >= THREE_FROM else TWO if room >= TWO_FROM else ONE
+
+    def addItem(self, item: QLayoutItem) -> None:
+        self._items.append(item)
+
+    def count(self) -> int:
+        return len(self._items)
+
+    def itemAt(self, index: int) -> QLayoutItem | None:
+        return self._items[index] if 0 <= index < len(self._items) else None
+
+    def takeAt(self, index: int) -> QLayoutItem | None:
+        return self._items.pop(index) if 0 <= index < len(self._items) else None
+
+    def hasHeightForWidth(self) -> bool:
+        return True
+
+    def heightForWidth(self, width: int) -> int:
+        return max((sum(h for _, h in pillar) for pillar in self._heights(width)), default=0)
+
+    def sizeHint(self) -> QSize:
+        return QSize(self._look.px(1200), self.heightForWidth(self._look.px(1200)))
+
+    def minimumSize(self) -> QSize:
+        widest = max((item.minimumSize().width() for item in self._items), default=0)
+        return QSize(widest, self._look.px(100))
+
+    def setGeometry(self, rect: QRect) -> None:
+        super().setGeometry(rect)
+        x = rect.x()
+        for width, pillar in zip(self._widths(rect.width()), self._heights(rect.width()), strict=True):
+            y = rect.y()
+            for place, (index, height) in enumerate(pillar):
+                tall = rect.bottom() + 1 - y if place == len(pillar) - 1 else height
+                self._items[index].setGeometry(QRect(x, y, width, max(tall, height)))
+                y += height
+            x += width
+
+    def _widths(self, width: int) -> list[int]:
+        shares = self.arrangement(width).shares
+        edges = [round(width * sum(shares[:i]) / sum(shares)) for i in range(len(shares) + 1)]
+        return [right - left for left, right in zip(edges, edges[1:], strict=False)]
+
+    def _heights(self, width: int) -> list[list[tuple[int, int]]]:
+        """For each pillar, its columns with the heights they ask for."""
+        pillars = self.arrangement(width).pillars
+        return [
+            [(index, self._items[index].heightForWidth(wide)) for index in pillar if index < len(self._items)]
+            for wide, pillar in zip(self._widths(width), pillars, strict=True)
+        ]
 
 
 class Page(QWidget):
     """The three columns on one page, parted by hairlines."""
 
-    def __init__(self, look: Look, printed: QWidget, says: QWidget, patient: QWidget) -> None:
+    def __init__(self, look: Look, columns: tuple[QWidget, QWidget, QWidget]) -> None:
         super().__init__()
         self._look = look
-        self._columns = (printed, says, patient)
-        self.arrangement = 0
-        self._grid = QGridLayout(self)
-        self._grid.setContentsMargins(0, 0, 0, 0)
-        self._grid.setSpacing(0)
-        for column in self._columns:
-            column.setParent(self)
-
-    def arrange(self, width: int) -> None:
-        """Choose the arrangement for a width of the window."""
-        room = width / self._look.zoom
-        arrangement = 3 if room >= THREE_FROM else 2 if room >= TWO_FROM else 1
-        if arrangement == self.arrangement:
-            return
-        self.arrangement = arrangement
-        while self._grid.count():
-            self._grid.takeAt(0)
-        printed, says, patient = self._columns
-        if arrangement == 3:
-            places = ((printed, 0, 0, 1), (says, 0, 1, 1), (patient, 0, 2, 1))
-            stretches = (375, 515, 390)
-        elif arrangement == 2:
-            places = ((printed, 0, 0, 1), (patient, 1, 0, 1), (says, 0, 1, 2))
-            stretches = (420, 560, 0)
-        else:
-            places = ((printed, 0, 0, 1), (says, 1, 0, 1), (patient, 2, 0, 1))
-            stretches = (1, 0, 0)
-        for widget, row, column, rows in places:
-            self._grid.addWidget(widget, row, column, rows, 1)
-        for column, stretch in enumerate(stretches):
-            self._grid.setColumnStretch(column, stretch)
-        for row in range(3):
-            self._grid.setRowStretch(row, 0)
-        self._grid.setRowStretch({3: 0, 2: 1, 1: 2}[arrangement], 1)
+        self._columns = columns
+        layout = ColumnsLayout(look, self)
+        for column in columns:
+            layout.addWidget(column)
 
     def paintEvent(self, event: QPaintEvent) -> None:
         painter = QPainter(self)
         hairline = self._look.colour("hairline")
-        printed, says, patient = self._columns
-        if self.arrangement > 1:
-            painter.fillRect(says.x(), 0, 1, self.height(), hairline)
-        if self.arrangement == 3:
-            painter.fillRect(patient.x(), 0, 1, self.height(), hairline)
-        else:
-            painter.fillRect(patient.x(), patient.y(), patient.width(), 1, hairline)
-        if self.arrangement == 1:
-            painter.fillRect(says.x(), says.y(), says.width(), 1, hairline)
+        for column in self._columns:
+            if column.x() > 0:
+                painter.fillRect(column.x(), 0, 1, self.height(), hairline)
+            if column.y() > 0:
+                painter.fillRect(column.x(), column.y(), column.width(), 1, hairline)
         painter.end()
 
 
@@ -74,18 +119,9 @@ class PageScroll(QScrollArea):
 
     def __init__(self, look: Look, page: Page) -> None:
         super().__init__()
-        self._look = look
-        self._page = page
         self.setFrameShape(QFrame.Shape.NoFrame)
         self.setWidgetResizable(True)
-        self.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAsNeeded)
+        self.setVerticalScrollBar(ScrollBar(look))
+        self.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
         self.setFocusPolicy(Qt.FocusPolicy.NoFocus)
         self.setWidget(page)
-        look.changed.connect(self._on_look_changed)
-
-    def resizeEvent(self, event: QResizeEvent) -> None:
-        self._page.arrange(self.width())
-        super().resizeEvent(event)
-
-    def _on_look_changed(self) -> None:
-        self._page.arrange(self.width())

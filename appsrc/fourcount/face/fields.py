@@ -41,6 +41,7 @@ class TextField(QLineEdit):
         self._look = look
         self._role: Role = role
         self.setFrame(False)
+        self.setTextMargins(-2, 0, -2, 0)
         self.setAccessibleName(name)
         self.setPlaceholderText(hint)
         self.setMinimumWidth(0)
@@ -53,6 +54,8 @@ class TextField(QLineEdit):
         """Show a text without moving the cursor where it is the same already."""
         if text != self.text():
             self.setText(text)
+            if not self.hasFocus():
+                self.setCursorPosition(0)
 
     def show_mark(self, reason: str) -> None:
         """Mark the field with a reason, or take the mark away with an empty one."""
@@ -94,6 +97,7 @@ class TextField(QLineEdit):
 
     def focusOutEvent(self, event: QFocusEvent) -> None:
         super().focusOutEvent(event)
+        self.setCursorPosition(0)
         if event.reason() != Qt.FocusReason.PopupFocusReason:
             self.left.emit(self.field)
 
@@ -111,6 +115,22 @@ class TextField(QLineEdit):
         self.updateGeometry()
 
 
+class QuietField(TextField):
+    """A field without an edge until it has the focus or the mouse, for a line that reads as a heading."""
+
+    def sizeHint(self) -> QSize:
+        return QSize(super().sizeHint().width(), self._look.px(24))
+
+    def minimumSizeHint(self) -> QSize:
+        return QSize(super().minimumSizeHint().width(), self._look.px(24))
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        if self.hasFocus() or self.underMouse() or not self.text():
+            super().paintEvent(event)
+        else:
+            super(TextField, self).paintEvent(event)
+
+
 class ChoiceField(QComboBox):
     """A choice among a few, shown as its value with a small triangle over a hairline.
 
@@ -121,12 +141,14 @@ class ChoiceField(QComboBox):
     chosen = Signal(str)
 
     def __init__(
-        self, look: Look, name: str, choices: Sequence[tuple[str, str]], prefix: str = "", plain: bool = False
+        self, look: Look, name: str, choices: Sequence[tuple[str, str]], prefix: str = "", plain: bool = False,
+        whole: bool = False,
     ) -> None:
         super().__init__()
         self._look = look
         self._prefix = prefix
         self._plain = plain
+        self._whole = whole
         for key, text in choices:
             self.addItem(text, key)
         self.setAccessibleName(name)
@@ -158,10 +180,10 @@ class ChoiceField(QComboBox):
     def sizeHint(self) -> QSize:
         widest = max((self.fontMetrics().horizontalAdvance(self.itemText(i)) for i in range(self.count())), default=0)
         shown = self.fontMetrics().horizontalAdvance(self._prefix + self.currentText())
-        return QSize((shown if self._plain else widest) + self._look.px(24), self._look.px(30))
+        return QSize((shown if self._plain else widest) + self._look.px(20), self._look.px(30))
 
     def minimumSizeHint(self) -> QSize:
-        return self.sizeHint() if self._plain else QSize(self._look.px(56), self._look.px(30))
+        return self.sizeHint() if self._plain or self._whole else QSize(self._look.px(56), self._look.px(30))
 
     def paintEvent(self, event: QPaintEvent) -> None:
         painter = QPainter(self)
@@ -169,7 +191,7 @@ class ChoiceField(QComboBox):
         self.initStyleOption(option)
         mouse_over = bool(option.state & QStyle.StateFlag.State_MouseOver)
         mark = self._look.px(16)
-        text_area = self.rect().adjusted(0 if self._plain else 2, 0, -mark, 0)
+        text_area = self.rect().adjusted(0, 0, -mark, 0)
         quiet = self._plain and not (mouse_over or self.hasFocus())
         painter.setFont(self.font())
         painter.setPen(QPen(self._look.colour("muted" if quiet else "ink")))

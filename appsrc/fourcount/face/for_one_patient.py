@@ -30,7 +30,7 @@ class PictureView(QWidget):
         super().__init__()
         self._look = look
         self.picture: Picture | None = None
-        policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
+        policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
         policy.setHeightForWidth(True)
         self.setSizePolicy(policy)
         self.hide()
@@ -38,13 +38,11 @@ class PictureView(QWidget):
 
     def show_picture(self, picture: Picture | None, sentence: str) -> None:
         """Show a picture, or nothing."""
-        before = self.heightForWidth(self.width())
         self.picture = picture
         self.setAccessibleName(labels.COLUMNS["patient"])
         self.setAccessibleDescription(sentence)
         self.setVisible(picture is not None)
-        if self.heightForWidth(self.width()) != before:
-            self.updateGeometry()
+        self.updateGeometry()
         self.update()
 
     def hasHeightForWidth(self) -> bool:
@@ -88,7 +86,7 @@ class ForOnePatient(QWidget):
         self._look = look
         self._bars = False
         self._shown: tuple[Outcome, OutcomeFindings] | None = None
-        self.baseline = TextField(look, "starting_risk_text", labels.FIELDS["starting_risk_text"])
+        self.baseline = TextField(look, "starting_risk_text", labels.FIELDS["starting_risk_text"], role="total")
         self.source = TextField(
             look,
             "starting_risk_source_text",

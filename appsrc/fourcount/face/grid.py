@@ -8,7 +8,7 @@ from PySide6.QtCore import QRectF, QSize, Qt, Signal
 from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent, QPen
 from PySide6.QtWidgets import QGridLayout, QLabel, QSizePolicy, QWidget
 
-from fourcount.face.fields import TextField
+from fourcount.face.fields import QuietField, TextField
 from fourcount.face.look import Look
 from fourcount.record.outcome import CELLS, EventsOfTotal, Outcome
 from fourcount.wording import labels
@@ -37,7 +37,7 @@ class CountCell(TextField):
         return QSize(self._look.px(84), self._look.px(40))
 
     def minimumSizeHint(self) -> QSize:
-        return QSize(self._look.px(64), self._look.px(40))
+        return QSize(self._look.px(74), self._look.px(40))
 
     def keyPressEvent(self, event: QKeyEvent) -> None:
         key = Qt.Key(event.key())
@@ -91,11 +91,11 @@ class Grid(QWidget):
         self._arranged: tuple[str, bool] | None = None
         self.cells = {field: CountCell(look, field) for field in CELLS}
         self.labels = {
-            position: TextField(look, f"{position}_label_text", f"Name of the {name}", labels.HINTS["label"])
+            position: QuietField(look, f"{position}_label_text", f"Name of the {name}", labels.HINTS["label"])
             for position, name in labels.GROUP_NAMES.items()
         }
         self.headings = {
-            column: TextField(look, f"{column}_heading_text", f"Short name of the {column} outcome")
+            column: QuietField(look, f"{column}_heading_text", f"Short name of the {column} outcome", role="small")
             for column in ("left", "right")
         }
         self.roles = {key: self._small() for key in ("first", "second", "left", "right")}
@@ -183,7 +183,7 @@ class Grid(QWidget):
             self._place(row, 3, self.totals[position])
         for column, key in ((1, "left"), (2, "right"), (3, "everyone")):
             self._place(3, column, self.totals[key])
-        for column, stretch in enumerate((6, 5, 5, 4)):
+        for column, stretch in enumerate((7, 5, 5, 2)):
             self._layout.setColumnStretch(column, stretch)
         self._set_alignment(layout)
 
@@ -238,7 +238,7 @@ class Grid(QWidget):
 
     def _on_look_changed(self) -> None:
         px = self._look.px
-        self._layout.setHorizontalSpacing(px(14))
+        self._layout.setHorizontalSpacing(px(10))
         self._layout.setVerticalSpacing(0)
         for block in range(3):
             self._layout.setRowMinimumHeight(3 * block + 2, px(8))

@@ -6,22 +6,12 @@ from PySide6.QtCore import Signal
 from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QHBoxLayout, QSizePolicy, QWidget
 
-from fourcount.face.fields import TextField
+from fourcount.face.fields import QuietField
 from fourcount.face.links import Link
 from fourcount.face.look import Look
 from fourcount.face.text import Words
 from fourcount.record.paper import Record
 from fourcount.wording import labels
-
-
-class QuietField(TextField):
-    """A field without an edge until it has the focus or the mouse, for a line that reads as a heading."""
-
-    def paintEvent(self, event: QPaintEvent) -> None:
-        if self.hasFocus() or self.underMouse() or not self.text():
-            super().paintEvent(event)
-        else:
-            super(TextField, self).paintEvent(event)
 
 
 class Header(QWidget):

@@ -34,8 +34,11 @@ class Link(QAbstractButton):
             self.setAccessibleName(words)
             self.updateGeometry()
 
+    def minimumSizeHint(self) -> QSize:
+        return QSize(self._look.px(40), self._look.px(24))
+
     def sizeHint(self) -> QSize:
-        return QSize(self.fontMetrics().horizontalAdvance(self.text()) + 2, self._look.px(28))
+        return QSize(self.fontMetrics().horizontalAdvance(self.text()) + 2, self._look.px(24))
 
     def keyPressEvent(self, event) -> None:  # noqa: ANN001 - Qt's own signature
         if event.key() in (Qt.Key.Key_Return, Qt.Key.Key_Enter):
@@ -49,7 +52,8 @@ class Link(QAbstractButton):
         font.setUnderline(self.underMouse() or self.hasFocus())
         painter.setFont(font)
         painter.setPen(QPen(self._look.colour("accent")))
-        painter.drawText(self.rect(), Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter, self.text())
+        words = self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, self.width())
+        painter.drawText(self.rect(), Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter, words)
         if self.hasFocus():
             painter.setPen(QPen(self._look.colour("accent"), 1, Qt.PenStyle.DotLine))
             painter.drawRect(self.rect().adjusted(0, 0, -1, -1))

@@ -33,11 +33,11 @@ class Places(NamedTuple):
 
 def places(look: Look, width: float) -> Places:
     """Share a row's width among its parts, alike in every row."""
-    strip_width = min(look.px(132), width * 0.34)
+    strip_width = min(look.px(118), width * 0.3)
     if width < look.px(ONE_LINE_FROM):
         return Places(width - strip_width - look.px(12), 0, 0, width - strip_width, strip_width, True)
     strip = width - strip_width
-    estimate_right = width * 0.475
+    estimate_right = width * 0.46
     return Places(width * 0.32, estimate_right, estimate_right + look.px(12), strip, strip_width, False)
 
 
@@ -60,7 +60,7 @@ class MeasureRow(QWidget):
         self._open = False
         self.setFocusPolicy(Qt.FocusPolicy.TabFocus)
         self.setCursor(Qt.CursorShape.PointingHandCursor)
-        policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
+        policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
         policy.setHeightForWidth(True)
         self.setSizePolicy(policy)
         look.changed.connect(self._on_look_changed)
@@ -71,10 +71,8 @@ class MeasureRow(QWidget):
         """Show a line on a scale; ``axis`` is given to the last row that shares the scale."""
         if (line, scale, axis, is_open) == (self._line, self._scale, self._axis, self._open):
             return
-        before = self._height(self.width()) if self._line else -1
         self._line, self._scale, self._axis, self._open = line, scale, axis, is_open
-        if before != self._height(self.width()):
-            self.updateGeometry()
+        self.updateGeometry()
         self.update()
         values = line.withheld or f"{line.estimate}, {line.interval}"
         self.setAccessibleName(f"{line.name}: {values}")

@@ -68,11 +68,13 @@ class WhatItSays(QWidget):
         if findings is None:
             self._shown = None
             return
+        from fourcount.appraisal.findings import Gap
         from fourcount.wording.sentence import headline, p_sentence
 
         self._shown = (outcome, findings, record.choices)
         self.sentence.show_words(headline(outcome, findings, record.choices))
-        self.p_words.show_words(p_sentence(findings))
+        untyped = isinstance(findings.counts, Gap)
+        self.p_words.show_words("" if untyped else p_sentence(findings))
         self._show_rows()
 
     def set_more(self, more: bool) -> None:
@@ -140,11 +142,11 @@ class WhatItSays(QWidget):
 
     def _keep_tab_order(self) -> None:
         rows = list(self._rows.values())
-        before: QWidget = self.p_words
+        before: QWidget = self.sentence
         for row in rows:
             QWidget.setTabOrder(before, row)
             before = row
-        QWidget.setTabOrder(before, self.more)
+        QWidget.setTabOrder(before, self.p_words)
 
     def _show_working(self, shown: set[str]) -> None:
         """Put the working under its row; it is computed only while it is open."""
@@ -176,8 +178,8 @@ class WhatItSays(QWidget):
         self._column = QVBoxLayout(self)
         self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["says"].upper(), wraps=False))
         self._column.addWidget(self.sentence)
-        self._column.addWidget(self.p_words)
         self._column.addLayout(self._measures)
+        self._column.addWidget(self.p_words)
         self._column.addLayout(choosers)
         self._column.addLayout(copies)
         self._column.addStretch(1)

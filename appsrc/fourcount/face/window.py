@@ -55,6 +55,7 @@ class MainWindow(QMainWindow):
         self._build()
         self._connect_all()
         self._show_state(session.record, None)
+        self._set_tab_order()
         self.printed.grid.cells[CELLS[0]].setFocus()
 
     def _build(self) -> None:
@@ -69,12 +70,11 @@ class MainWindow(QMainWindow):
         column.setSpacing(0)
         column.addWidget(self.header)
         column.addWidget(self.banner)
-        self.page = Page(self.look, self.printed, self.says, self.patient)
+        self.page = Page(self.look, (self.printed, self.says, self.patient))
         self.page_scroll = PageScroll(self.look, self.page)
         column.addWidget(self.page_scroll, 1)
         column.addWidget(self.cautions)
         self.setCentralWidget(inside)
-        self._set_tab_order()
         self._on_look_changed()
         geometry = self._settings.geometry()
         if not geometry.isEmpty():
@@ -101,6 +101,7 @@ class MainWindow(QMainWindow):
             grid.labels["second"], *grid.cells.values(), *printed.links, printed.example, says.sentence,
             says.p_words, says.more, says.family, says.level, says.help, *says.copies, patient.baseline,
             patient.source, patient.effect, patient.summary, patient.detail, patient.copy,
+            self.cautions,
         ]  # fmt: skip
         for before, after in zip(order, order[1:], strict=False):
             self.setTabOrder(before, after)

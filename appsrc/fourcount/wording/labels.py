@@ -23,10 +23,10 @@ FIELDS = {
 HINTS = {
     "title_text": "Title of the paper",
     "source_text": "table, page or figure · no patient details",
-    "words": "what happened, as in “fell at least once”",
-    "span_text": "as in “12 months”",
-    "starting_risk_source_text": "where it comes from · no patient details",
-    "label": "name this group",
+    "words": "“fell at least once”",
+    "span_text": "“12 months”",
+    "starting_risk_source_text": "its source · no patient details",
+    "label": "group name",
     "left_heading": "event",
     "right_heading": "no event",
     "left_heading_cases": "cases",
@@ -46,7 +46,7 @@ WELCOME = {"unwelcome": "unwelcome", "welcome": "welcome"}
 FORMS = {"events-and-others": "38 · 374", "events-of-total": "38 of 412"}
 """How a paper prints the counts of a group, by a specimen."""
 
-LAYOUTS = {"down": "down", "across": "across"}
+LAYOUTS = {"down": "groups down", "across": "groups across"}
 
 FAMILIES = {"score": "score", "textbook": "textbook", "exact": "exact"}
 EFFECTS = {"risk_ratio": "risk ratio", "odds_ratio": "odds ratio"}
@@ -56,7 +56,7 @@ OTHER_LEVEL = "another…"
 INTERVALS_PREFIX = "Intervals: "
 LEVEL_PREFIX = "Level: "
 
-ROLES = {"index": "index group", "reference": "reference group", "counted": "counted"}
+ROLES = {"index": "index", "reference": "reference", "counted": "counted"}
 TOTAL = "total"
 OF = "of"
 
@@ -67,10 +67,10 @@ CELL_NAMES = {
     "right": "{group}, all people",
 }
 
-FIRST_STEP = "New here? Open a worked example with invented numbers"
+FIRST_STEP = "New here? See an invented example"
 PATIENT_WAITS = "The picture appears once the four counts are there."
-BASELINE_HINT = "{percent}, as in the study"
-BASELINE_HINT_EMPTY = "as in the study"
+BASELINE_HINT = "{percent}"
+BASELINE_HINT_EMPTY = "the study’s"
 BASELINE_HINT_NEEDED = "needed"
 
 LINKS = {"help": "Methods and sources", "more": "More measures", "less": "Fewer measures"}

@@ -1,0 +1,33 @@
+"""A slim scroll bar: a handle on the page, without arrows."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import QRectF, QSize, Qt
+from PySide6.QtGui import QPainter, QPaintEvent
+from PySide6.QtWidgets import QScrollBar, QStyle, QStyleOptionSlider
+
+from fourcount.face.look import Look
+
+
+class ScrollBar(QScrollBar):
+    """A vertical bar drawn in the palette's outline."""
+
+    def __init__(self, look: Look) -> None:
+        super().__init__(Qt.Orientation.Vertical)
+        self._look = look
+
+    def sizeHint(self) -> QSize:
+        return QSize(12, super().sizeHint().height())
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        option = QStyleOptionSlider()
+        self.initStyleOption(option)
+        slider = QStyle.SubControl.SC_ScrollBarSlider
+        handle = self.style().subControlRect(QStyle.ComplexControl.CC_ScrollBar, option, slider, self)
+        painter = QPainter(self)
+        painter.setRenderHint(QPainter.RenderHint.Antialiasing)
+        painter.fillRect(self.rect(), self._look.colour("page"))
+        painter.setPen(Qt.PenStyle.NoPen)
+        painter.setBrush(self._look.colour("outline"))
+        painter.drawRoundedRect(QRectF(handle).adjusted(3, 0, -3, 0), 3, 3)
+        painter.end()
