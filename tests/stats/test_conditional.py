@@ -13,7 +13,13 @@ from hypothesis import given, settings
 from hypothesis import strategies as st
 from scipy.stats.contingency import odds_ratio as scipy_odds_ratio
 
-from fourcount.stats.conditional import conditional_exact, conditional_mid_p, conditional_odds_ratio
+from fourcount.stats import hypergeometric
+from fourcount.stats.conditional import (
+    baptista_pike_mid_p,
+    conditional_exact,
+    conditional_mid_p,
+    conditional_odds_ratio,
+)
 from fourcount.stats.hypergeometric import Window, product_sum, window
 from fourcount.stats.results import Counts, Gap, Interval
 
@@ -313,6 +319,20 @@ def test_too_narrow_a_window_is_seen() -> None:
     for seen, holds in ((cut, False), (near, True), (far, True)):
         weights = seen.weights(0.0)
         assert seen.holds(weights, float(weights.sum())) is holds
+
+
+def test_a_window_begun_too_narrow_is_widened(monkeypatch: pytest.MonkeyPatch) -> None:
+    """However narrow the first window, the limits are the same; a support known to its ends is left alone."""
+    tables = [counts((1010, 990, 1000, 1000)), counts((400, 10**6, 300, 10**6)), counts((3, 10**6, 900, 10**6))]
+    methods = (conditional_exact, conditional_mid_p, baptista_pike_mid_p)
+    expected = [interval(method(table, 0.999)) for table in tables for method in methods]
+    for name, narrow in (("_REACH", 1.0), ("_MARGIN", 0.0), ("_FARTHEST_Z", 0.5)):
+        monkeypatch.setattr(hypergeometric, name, narrow)
+    window.cache_clear()
+    found = [interval(method(table, 0.999)) for table in tables for method in methods]
+    window.cache_clear()
+    for narrow_start, wide in zip(found, expected, strict=True):
+        assert (narrow_start.low, narrow_start.high) == pytest.approx((wide.low, wide.high), rel=1e-13)
 
 
 def test_sums_in_pieces_are_the_sums() -> None:

@@ -33,7 +33,7 @@ _FARTHEST_Z = 3.5
 """Standard errors by which a limit at the 99.9% level may stand off the estimate, rounded up."""
 
 
-@dataclass(frozen=True, slots=True)
+@dataclass(frozen=True, slots=True, eq=False)
 class Window:
     """Log weights of the tables near the observed one, relative to it, at the odds ratio ``centre``.
 
