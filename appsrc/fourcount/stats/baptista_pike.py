@@ -85,9 +85,9 @@ def _first_top(near: Window, jumps: Array, unlikely: float, own: float, room: Ar
     guess = min(int(jumps.searchsorted(first_guess(near.spread, unlikely / 2))), last)
     top = _Sum(near, float(jumps[guess]), own, room)
     value = top.value(guess + 1)
-    if 0 < guess < last and value > 0:
-        # On the tops, both tails shrink alike: the upper one's slope tells how many jumps are between.
-        rise = top.upper_slope() * float(jumps[guess] - jumps[guess - 1])
+    # On the tops, both tails shrink alike: the upper one's slope tells how many jumps are between.
+    rise = top.upper_slope() * float(jumps[guess] - jumps[guess - 1]) if 0 < guess < last else 0.0
+    if rise > 0:
         guess = max(0, min(last, guess + math.ceil((math.log(unlikely) - math.log(value)) / rise)))
     return _halved(lambda at: _Sum(near, float(jumps[at]), own, room).value(at + 1) > unlikely, guess, last)
 
@@ -134,8 +134,8 @@ class _Sum:
         return inner / self._total - self._mean * self.value(lowest)
 
     def upper_slope(self) -> float:
-        """Derivative by the tilt of the log of the upper tail."""
-        return self._upper_moment() / self._upper - self._mean
+        """Derivative by the tilt of the log of the upper tail; 0 where that is below the smallest double."""
+        return self._upper_moment() / self._upper - self._mean if self._upper > 0 else 0.0
 
     def _upper_moment(self) -> float:
         return product_sum(self._weights[self._observed :], self._steps[self._observed :])
