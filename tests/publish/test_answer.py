@@ -92,6 +92,7 @@ WRONG = [
     {"level": True},
     {"level": "95%"},
     {"baseline": 12},
+    {"baseline": 1.5},
     {"baseline": -0.1},
     {"baseline": float("nan")},
     {"baseline": True},

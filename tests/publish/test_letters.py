@@ -16,7 +16,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Gap
 from fourcount.publish.listing import WIDTH, listing
 from fourcount.publish.plain_text import one_line
-from fourcount.publish.prose import prose
+from fourcount.publish.prose import _paragraph, prose
 from fourcount.publish.sheet import HEAD, Row, html, rows, tsv
 from fourcount.record.outcome import CELLS, DESIGNS, EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import FAMILIES, Choices, Record
@@ -110,13 +110,21 @@ def test_a_shared_reason_is_said_once() -> None:
     assert " ".join(on_screen(outcome).split()).count(reason) == 1
 
 
+def test_what_several_texts_say_is_said_once() -> None:
+    """A text, or a last sentence, that comes again stands at its last place only; everything else stays."""
+    texts = ["Risk 17.1%. An average.", "Risk 9.2%. An average.", "No reason.", "", "No reason.", "Twice 17.1%."]
+    assert _paragraph(texts) == "Risk 17.1%. Risk 9.2%. An average. No reason. Twice 17.1%."
+
+
 def test_a_given_starting_risk_is_in_every_export() -> None:
     """The patient's figures follow wherever a starting risk was typed."""
     outcome = outcome_of((38, 374, 70, 339), risk="12%")
     assert "For one patient" in letter(outcome)
     assert "For one patient" in on_screen(outcome)
     assert sum(row[0].startswith("For one patient, 12%") for row in table_of(outcome)) == 4
+    assert any(row[0] == "For one patient, 12%: NNTB" for row in table_of(outcome))
     assert not any(row[0].startswith("For one patient") for row in table_of(OUTCOME))
+    assert "For one patient" not in on_screen(OUTCOME)
 
 
 def test_long_names_leave_the_figures_in_their_columns() -> None:
