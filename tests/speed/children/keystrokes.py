@@ -1,9 +1,9 @@
 """Keystrokes in a filled table: how long until every view is repainted, and how long the key event itself takes.
 
-    keystrokes.py score|textbook|exact LARGEST
+    keystrokes.py score|textbook|exact LARGEST FOLDER
 
 Digits near the end of the four cells are overtyped one at a time, so that each state of the table is a new one and
-the size of the counts stays. Times are in milliseconds.
+the size of the counts stays. FOLDER is an empty one for the settings. Times are in milliseconds.
 """
 
 from __future__ import annotations
@@ -12,7 +12,6 @@ import json
 import os
 import random
 import sys
-import tempfile
 import time
 from pathlib import Path
 
@@ -24,8 +23,8 @@ from fourcount.face.application import make_application, make_window
 from fourcount.record.outcome import CELLS, EventsAndOthers, Outcome
 from fourcount.record.paper import Choices, Record
 
-KEYS = 120
-QUIET = 0.02  # seconds without a paint after which the window is at rest
+KEYS = 80
+QUIET = 0.015  # seconds without a paint after which the window is at rest
 SHARES = (0.93, 0.71, 0.88, 0.97)  # of the largest count, one a cell
 
 
@@ -56,12 +55,13 @@ def settle(paints: Paints) -> float:
 
 
 def main() -> None:
-    family, largest = sys.argv[1], int(sys.argv[2])
+    family, folder = sys.argv[1], sys.argv[3]
+    largest = int(sys.argv[2])
     make_application(sys.argv[:1])
     texts = {name: str(round(share * largest)) for name, share in zip(CELLS, SHARES, strict=True)}
     outcome = Outcome(table=EventsAndOthers(**texts))
     record = Record(outcomes=(outcome,), choices=Choices(family=family))  # type: ignore[arg-type]
-    window = make_window(Path(tempfile.mkdtemp(prefix="fourcount-speed-")), record)
+    window = make_window(Path(folder), record)
     loaded: list[bool] = []
     window._later.loaded.connect(lambda: loaded.append(True))
     window.show()
@@ -75,7 +75,6 @@ def main() -> None:
     for _ in range(KEYS):
         cell = chance.choice(cells)
         cell.setFocus()
-        settle(paints)
         at = len(cell.text()) - chance.randint(1, 3)
         cell.setSelection(at, 1)
         digit = chance.choice([key for key in "123456789" if key != cell.text()[at]])

@@ -9,7 +9,6 @@ from __future__ import annotations
 
 import os
 import sys
-import tempfile
 from pathlib import Path
 
 from first_paint import FirstPaint, report
@@ -40,10 +39,10 @@ class Watch:
 
 
 def main() -> None:
-    what = sys.argv[1]
+    what, folder = sys.argv[1:]
     application = make_application(sys.argv[:1])
     record = Record(outcomes=(Outcome(table=TABLE),)) if what == "findings" else None
-    window = make_window(Path(tempfile.mkdtemp(prefix="fourcount-speed-")), record)
+    window = make_window(Path(folder), record)
     watch = Watch(window)
     if what == "painted":
         FirstPaint(window, _done)
