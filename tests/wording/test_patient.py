@@ -33,7 +33,7 @@ def test_the_example_at_twelve_per_cent(outcome_of, findings_of):
         "",
         "did not fall",
     )
-    assert (words.summary_bold, words.summary) == ("6 fewer in 100", "over 12 months, range 3 to 8")
+    assert (words.summary_bold, words.summary) == ("6 fewer in 100 fell at least once", "over 12 months, range 3 to 8")
     assert words.detail == (
         "NNTB at this starting risk 19 (14 to 38). In relative words 46% lower (22% to 63%). "
         "The range leaves out that 12% is itself uncertain."
@@ -71,9 +71,9 @@ def test_counts_and_percentages_say_the_same(outcome_of, findings_of, denominato
 def test_what_cannot_be_drawn_is_still_said(outcome_of, findings_of):
     """Text on the first number of people that tells the two risks apart."""
     words = words_of(outcome_of(patient=at("0.01%")), findings_of, None)
-    assert words.scale == "too small to draw"
+    assert words.scale == "Too small to draw as people."
     assert (words.without_count, words.with_count) == ("10 in 100,000", "5 in 100,000")
-    assert words.summary_bold == "5 fewer in 100,000"
+    assert words.summary_bold == "5 fewer in 100,000 fell at least once"
 
 
 def test_a_larger_picture_is_announced(outcome_of, findings_of):
@@ -115,18 +115,23 @@ def test_what_is_not_named_yet_is_listed(findings_of, outcome_of):
     assert words.without_title == "Without: reference group"
 
 
-def test_a_welcome_event_is_lost_and_not_avoided(outcome_of, findings_of):
-    """Fewer of a good event is no avoidance."""
+def test_of_a_welcome_event_the_other_outcome_is_drawn(outcome_of, findings_of):
+    """Icons always stand for the unwelcome outcome, so that pictures of one page can be compared."""
     words = words_of(outcome_of(left_welcome=True, name_text="Recovery"), findings_of)
-    assert words.key_avoided == "recovery lost, on balance"
+    assert (words.without_count, words.with_count) == ("83 in 100", "91 in 100")
+    assert (words.key_event, words.key_other) == ("did not fall", "fell")
+    assert (words.key_avoided, words.key_added) == ("", "added, on balance")
+    assert words.summary_bold == "8 more in 100 did not fall"
+    assert words.scale == "The figures counted here are those with the unwelcome outcome."
     assert words.detail.startswith("NNTH at this starting risk 13")
+    assert "The welcome outcome itself is, in relative words, 46% lower" in words.detail
 
 
 def test_more_events_are_added(outcome_of, findings_of):
     """The key follows the direction."""
     words = words_of(outcome_of(index_group="second", name_text=""), findings_of)
     assert (words.key_avoided, words.key_added) == ("", "added, on balance")
-    assert words.summary_bold == "8 more in 100"
+    assert words.summary_bold == "8 more in 100 fell at least once"
 
 
 def test_a_picture_that_travels_says_what_it_is_about():
@@ -142,7 +147,7 @@ def test_equal_risks_have_no_key_and_a_range(outcome_of, findings_of):
     """No icon is avoided or added."""
     words = words_of(outcome_of((10, 90, 10, 90)), findings_of)
     assert (words.key_avoided, words.key_added) == ("", "")
-    assert words.summary_bold == "The same number in 100"
+    assert words.summary_bold == "The same number in 100 fell at least once"
     assert words.summary == "over 12 months, range 9 fewer to 9 more"
 
 

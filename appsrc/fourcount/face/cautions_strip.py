@@ -16,6 +16,9 @@ from fourcount.wording import labels
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
 
+SAID_BESIDE = ("baseline-uncertain",)
+"""Cautions that the third column says in full beside the figure they concern."""
+
 HIGHEST_SHARE = 0.26
 """The largest share of the window's height that the strip takes before it scrolls."""
 
@@ -108,7 +111,7 @@ class CautionsStrip(QScrollArea):
         if findings and findings.cautions:
             from fourcount.wording.cautions import caution_text
 
-            texts = tuple(caution_text(caution) for caution in findings.cautions)
+            texts = tuple(caution_text(c) for c in findings.cautions if c.key not in SAID_BESIDE)
         if texts != self._inside.texts:
             self._inside.texts = texts
             self.setAccessibleDescription(" ".join((*texts, self._standing)))

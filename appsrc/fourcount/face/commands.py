@@ -102,7 +102,12 @@ def copy_picture(session: Session, picture: Picture | None, style: Style) -> boo
 
     if picture is None:
         return False
-    image = as_image(picture, style, picture_heading(session.record, session.outcome), f"{STANDING} Fourcount {__version__}, {date.today():%Y-%m-%d}")
+    image = as_image(
+        picture,
+        style,
+        picture_heading(session.record, session.outcome),
+        f"{STANDING} Fourcount {__version__}, {date.today():%Y-%m-%d}",
+    )
     QGuiApplication.clipboard().setImage(image)
     return True
 

@@ -125,10 +125,17 @@ class QuietField(TextField):
         return QSize(super().minimumSizeHint().width(), self._look.px(24))
 
     def paintEvent(self, event: QPaintEvent) -> None:
-        if self.hasFocus() or self.underMouse() or not self.text():
+        if self.hasFocus() or not self.text():
             super().paintEvent(event)
-        else:
-            super(TextField, self).paintEvent(event)
+            return
+        painter = QPainter(self)
+        painter.setFont(self.font())
+        painter.setPen(self._look.colour("ink"))
+        words = self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, self.width())
+        painter.drawText(self.rect(), self.alignment() | Qt.AlignmentFlag.AlignVCenter, words)
+        if self.underMouse():
+            draw_underline(self, painter, self._look)
+        painter.end()
 
 
 class ChoiceField(QComboBox):
@@ -141,7 +148,12 @@ class ChoiceField(QComboBox):
     chosen = Signal(str)
 
     def __init__(
-        self, look: Look, name: str, choices: Sequence[tuple[str, str]], prefix: str = "", plain: bool = False,
+        self,
+        look: Look,
+        name: str,
+        choices: Sequence[tuple[str, str]],
+        prefix: str = "",
+        plain: bool = False,
         whole: bool = False,
     ) -> None:
         super().__init__()
@@ -180,7 +192,7 @@ class ChoiceField(QComboBox):
     def sizeHint(self) -> QSize:
         widest = max((self.fontMetrics().horizontalAdvance(self.itemText(i)) for i in range(self.count())), default=0)
         shown = self.fontMetrics().horizontalAdvance(self._prefix + self.currentText())
-        return QSize((shown if self._plain else widest) + self._look.px(20), self._look.px(30))
+        return QSize((shown if self._plain else widest) + self._look.px(17), self._look.px(26 if self._plain else 30))
 
     def minimumSizeHint(self) -> QSize:
         return self.sizeHint() if self._plain or self._whole else QSize(self._look.px(56), self._look.px(30))

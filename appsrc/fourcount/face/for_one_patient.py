@@ -126,6 +126,7 @@ class ForOnePatient(QWidget):
         view = patient_view(outcome, findings, self._bars)
         self.baseline.setPlaceholderText(view.baseline_hint)
         self.effect.show_words(view.effect_words)
+        self.effect.show_choice(view.effect)
         self.effect.setEnabled(view.effect_is_free)
         self.baseline.show_mark(view.mark)
         self.mark.show_words(view.mark)
@@ -138,8 +139,8 @@ class ForOnePatient(QWidget):
     def _build(self) -> None:
         self._fields = QGridLayout()
         self._fields.setContentsMargins(0, 0, 0, 0)
-        self._fields.setColumnStretch(1, 4)
-        self._fields.setColumnStretch(2, 7)
+        self._fields.setColumnStretch(1, 3)
+        self._fields.setColumnStretch(2, 8)
         names = ("starting_risk_text", "effect")
         for row, name in enumerate(names):
             self._fields.addWidget(Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False), row, 0)

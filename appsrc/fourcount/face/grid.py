@@ -5,16 +5,20 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QRectF, QSize, Qt, Signal
-from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent, QPen
+from PySide6.QtGui import QFocusEvent, QFontMetrics, QKeyEvent, QPainter, QPaintEvent, QPen, QResizeEvent
 from PySide6.QtWidgets import QGridLayout, QLabel, QSizePolicy, QWidget
 
 from fourcount.face.fields import QuietField, TextField
-from fourcount.face.look import Look
+from fourcount.face.look import Look, Role
 from fourcount.record.outcome import CELLS, EventsOfTotal, Outcome
 from fourcount.wording import labels
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
+
+CELL_ROLES: tuple[Role, ...] = ("cell", "total", "body", "small")
+LONGEST_IN_FULL = 7
+"""Totals of more characters than this are all set smaller, so that the grid keeps its shape."""
 
 RIGHT = Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter
 
@@ -37,7 +41,15 @@ class CountCell(TextField):
         return QSize(self._look.px(84), self._look.px(40))
 
     def minimumSizeHint(self) -> QSize:
-        return QSize(self._look.px(74), self._look.px(40))
+        return QSize(self._look.px(60), self._look.px(40))
+
+    def show_text(self, text: str) -> None:
+        super().show_text(text)
+        self._fit_text()
+
+    def resizeEvent(self, event: QResizeEvent) -> None:
+        super().resizeEvent(event)
+        self._fit_text()
 
     def keyPressEvent(self, event: QKeyEvent) -> None:
         key = Qt.Key(event.key())
@@ -53,6 +65,16 @@ class CountCell(TextField):
             self.moved.emit(self.field, key)
             return
         super().keyPressEvent(event)
+
+    def _fit_text(self) -> None:
+        """Set a long text in a smaller size, so that it is seen whole."""
+        room = self.width() - self._look.px(18) - (self._look.px(8) if self.marked else 0)
+        for role in CELL_ROLES:
+            font = self._look.font(role)
+            if QFontMetrics(font).horizontalAdvance(self.text()) <= room:
+                break
+        if font != self.font():
+            self.setFont(font)
 
     def focusInEvent(self, event: QFocusEvent) -> None:
         super().focusInEvent(event)
@@ -163,6 +185,11 @@ class Grid(QWidget):
         self.totals["left"].setText(words("left"))
         self.totals["right"].setText(words(right))
         self.totals["everyone"].setText(words(everyone))
+        longest = max(len(label.text()) for label in self.totals.values())
+        font = self._look.font("total" if longest <= LONGEST_IN_FULL else "small")
+        for label in self.totals.values():
+            if label.font() != font:
+                label.setFont(font)
 
     def _arrange(self, layout: str, of_total: bool) -> None:
         """Place the widgets in blocks, typed columns first and what follows from them last; across, transposed."""
@@ -183,7 +210,7 @@ class Grid(QWidget):
             self._place(row, 3, self.totals[position])
         for column, key in ((1, "left"), (2, "right"), (3, "everyone")):
             self._place(3, column, self.totals[key])
-        for column, stretch in enumerate((7, 5, 5, 2)):
+        for column, stretch in enumerate((6, 5, 5, 4) if of_total else (7, 5, 5, 2)):
             self._layout.setColumnStretch(column, stretch)
         self._set_alignment(layout)
 
@@ -242,10 +269,9 @@ class Grid(QWidget):
         self._layout.setVerticalSpacing(0)
         for block in range(3):
             self._layout.setRowMinimumHeight(3 * block + 2, px(8))
+        self._layout.setColumnMinimumWidth(0, px(84))
         palette = self._look.text_palette("muted")
         for label in (*self.roles.values(), self.total_heading, *self.totals.values()):
             label.setPalette(palette)
         for label in (*self.roles.values(), self.total_heading):
             label.setFont(self._look.font("small"))
-        for label in self.totals.values():
-            label.setFont(self._look.font("total"))

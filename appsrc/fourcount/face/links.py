@@ -35,10 +35,10 @@ class Link(QAbstractButton):
             self.updateGeometry()
 
     def minimumSizeHint(self) -> QSize:
-        return QSize(self._look.px(40), self._look.px(24))
+        return QSize(self._look.px(40), self._look.px(26))
 
     def sizeHint(self) -> QSize:
-        return QSize(self.fontMetrics().horizontalAdvance(self.text()) + 2, self._look.px(24))
+        return QSize(self.fontMetrics().horizontalAdvance(self.text()) + 2, self._look.px(26))
 
     def keyPressEvent(self, event) -> None:  # noqa: ANN001 - Qt's own signature
         if event.key() in (Qt.Key.Key_Return, Qt.Key.Key_Enter):

@@ -75,7 +75,7 @@ class MeasureRow(QWidget):
         self.updateGeometry()
         self.update()
         values = line.withheld or f"{line.estimate}, {line.interval}"
-        self.setAccessibleName(f"{line.name}: {values}")
+        self.setAccessibleName(f"{line.name.replace(chr(10), ', ')}: {values}")
         self.setAccessibleDescription(" ".join(part for part in (line.detail, line.note) if part))
 
     def hasHeightForWidth(self) -> bool:
@@ -130,9 +130,12 @@ class MeasureRow(QWidget):
         look, colours = self._look, self._look.palette
         at = places(look, width)
         top = float(look.px(8))
-        name_height = self._text(painter, 0, top, at.name, line.name, "body", colours.ink)
-        detail = f"{line.detail}  {'▾' if self._open else '▸'}".strip()
-        name_height += self._text(painter, 0, top + name_height, at.name, detail, "small", colours.muted)
+        room = self._name_room(line, at)
+        opener = "▾" if self._open else "▸"
+        name = line.name if line.detail else f"{line.name}  {opener}"
+        detail = f"{line.detail}  {opener}" if line.detail else ""
+        name_height = self._text(painter, 0, top, room, name, "body", colours.ink)
+        name_height += self._text(painter, 0, top + name_height, room, detail, "small", colours.muted)
         if line.withheld:
             bottom = self._draw_withheld(painter, line, at, top, name_height, width)
         elif at.narrow:
@@ -150,6 +153,12 @@ class MeasureRow(QWidget):
         if line.note:
             bottom += self._text(painter, 0, bottom + look.px(2), width, line.note, "small", colours.muted) + look.px(2)
         return bottom + look.px(8)
+
+    def _name_room(self, line: MeasureLine, at: Places) -> float:
+        """Width for the name and its detail: up to the estimate, where the row has one beside it."""
+        if at.narrow or line.withheld:
+            return at.name
+        return at.estimate_right - text_width(line.estimate, self._look.font("estimate")) - self._look.px(10)
 
     def _draw_withheld(
         self, painter: QPainter | None, line: MeasureLine, at: Places, top: float, name_height: float, width: float
@@ -182,7 +191,7 @@ class MeasureRow(QWidget):
         font, body = look.font("estimate"), look.font("body")
         tall = text_height(line.estimate, font, at.estimate_right) if line.estimate else 0.0
         room = (at.strip - look.px(8) if self._scale else width) - at.interval
-        left = min(at.name, at.estimate_right - text_width(line.estimate, font) - 2)
+        left = at.estimate_right - text_width(line.estimate, font) - 2
         if painter and line.estimate:
             draw_text(painter, left, top, at.estimate_right - left, line.estimate, font, colours.ink, RIGHT)
         drop = max(tall - text_height("0", body, 1_000) - look.px(1), 0)
@@ -192,14 +201,14 @@ class MeasureRow(QWidget):
     def _draw_axis(self, painter: QPainter | None, at: Places, y: float) -> float:
         look = self._look
         font = look.font("small")
-        tall = text_height("0", font, 1_000)
-        if painter and self._axis:
-            low, middle, high = self._axis
-            full = sum(text_width(f"{part} ", font) for part in self._axis)
-            shown = ((low, LEFT), (middle if full < at.strip_width else "", CENTRE), (high, RIGHT))
-            for text, flags in shown:
-                if text:
-                    draw_text(painter, at.strip, y, at.strip_width, text, font, look.palette.muted, flags)
+        low, middle, high = self._axis or ("", "", "")
+        tall = max(text_height(end, font, at.strip_width / 2 - look.px(4)) for end in (low, high))
+        if painter:
+            colour, half = look.palette.muted, at.strip_width / 2 - look.px(4)
+            draw_text(painter, at.strip, y, half, low, font, colour, LEFT)
+            draw_text(painter, at.strip + at.strip_width - half, y, half, high, font, colour, RIGHT)
+            if sum(text_width(f"{part} ", font) for part in (low, middle, high)) < at.strip_width:
+                draw_text(painter, at.strip, y, at.strip_width, middle, font, colour, CENTRE)
         return y + tall
 
     def _text(

@@ -10,13 +10,16 @@ from fourcount.picture.plan import Plan, plan
 from fourcount.record.outcome import Outcome
 from fourcount.wording import labels, numbers
 from fourcount.wording.gaps import gap_text, mark_text
+from fourcount.wording.names import sentence_case
 from fourcount.wording.patient import PatientWords, patient_words
+from fourcount.wording.patient import drawn as what_is_drawn
 
 
 class PatientView(NamedTuple):
     """Everything that the column shows."""
 
     baseline_hint: str
+    effect: str
     effect_words: dict[str, str]
     effect_is_free: bool
     mark: str = ""
@@ -32,6 +35,7 @@ def patient_view(outcome: Outcome, findings: OutcomeFindings, bars: bool) -> Pat
     marks = {mark.field: mark_text(mark) for mark in findings.marks}
     view = PatientView(
         baseline_hint=_baseline_hint(outcome, findings),
+        effect="odds_ratio" if outcome.design == "case-control" else outcome.patient.effect,
         effect_words=_effect_words(findings),
         effect_is_free=outcome.design != "case-control",
         mark=marks.get("starting_risk_text", ""),
@@ -46,20 +50,23 @@ def patient_view(outcome: Outcome, findings: OutcomeFindings, bars: bool) -> Pat
 def _with_patient(
     view: PatientView, outcome: Outcome, findings: OutcomeFindings, patient: PatientFindings, bars: bool
 ) -> PatientView:
-    drawn = _plan(patient)
+    drawn = _plan(outcome, patient)
     words = patient_words(outcome, findings, drawn.denominator if drawn else None)
     missing = labels.MISSING.format(names=", ".join(words.missing)) if words.missing else ""
-    lines = (f"{words.summary_bold} {words.summary}".strip(), words.detail)
+    range_words = f"{sentence_case(words.summary)}." if words.summary else ""
+    detail = " ".join(part for part in (range_words, words.detail) if part)
+    lines = (words.summary_bold, detail)
     picture = Picture(drawn, _picture_words(words, lines), bars) if drawn else None
     return view._replace(
         picture=picture,
         sentence=words.picture_sentence,
         summary=lines[0],
-        detail="\n".join(part for part in (words.detail, missing) if part),
+        detail="\n".join(part for part in (detail, missing) if part),
     )
 
 
-def _plan(patient: PatientFindings) -> Plan | None:
+def _plan(outcome: Outcome, patient: PatientFindings) -> Plan | None:
+    _, patient = what_is_drawn(outcome, patient)
     without, with_ = patient.without.estimate, patient.with_.estimate
     if isinstance(without, Gap) or isinstance(with_, Gap):
         return None

@@ -34,7 +34,7 @@ class Settings:
         return zoom if 0.8 <= zoom <= 2.0 else 1.0
 
     def appearance(self) -> str:
-        """"system", "light" or "dark"."""
+        """ "system", "light" or "dark"."""
         value = str(self._store.value("appearance", "system"))
         return value if value in ("system", "light", "dark") else "system"
 

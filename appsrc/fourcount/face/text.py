@@ -12,7 +12,13 @@ class Words(QLabel):
     """A piece of plain text. Whatever it holds is shown as it is, never as markup."""
 
     def __init__(
-        self, look: Look, role: Role = "body", part: str = "ink", text: str = "", wraps: bool = True, selectable: bool = False
+        self,
+        look: Look,
+        role: Role = "body",
+        part: str = "ink",
+        text: str = "",
+        wraps: bool = True,
+        selectable: bool = False,
     ) -> None:
         super().__init__()
         self._look = look

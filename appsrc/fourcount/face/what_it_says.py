@@ -101,12 +101,12 @@ class WhatItSays(QWidget):
         if self._shown is None:
             return
         from fourcount.appraisal.findings import Gap
-        from fourcount.wording.lines import measure_lines
+        from fourcount.wording.lines import measure_lines, told_once
 
         outcome, findings, choices = self._shown
         untyped = isinstance(findings.counts, Gap)
         lines = () if untyped else measure_lines(outcome, findings, choices)
-        lines = tuple(line for line in lines if self._show_more or line.group == "main")
+        lines = told_once(tuple(line for line in lines if self._show_more or line.group == "main"))
         self._show_lines(lines)
         for widget in (self.more, *self.copies):
             widget.setVisible(not untyped)

@@ -56,9 +56,8 @@ def draw_icon(painter: QPainter, cell: QRectF, state: State, palette: Palette) -
         painter.strokePath(person(), _dashed(palette.outline, line))
         painter.strokePath(_stroke_through(), _round(palette.accent, line * 1.7))
     else:
-        painter.fillPath(person(), QColor(palette.tint))
-        painter.strokePath(person(), QPen(QColor(palette.accent), line))
-        painter.strokePath(_plus(), _round(palette.accent, line * 1.7))
+        painter.strokePath(person(), QPen(QColor(palette.accent), line * 1.2))
+        painter.fillPath(_dot(), QColor(palette.accent))
     painter.restore()
 
 
@@ -101,9 +100,7 @@ def _stroke_through() -> QPainterPath:
 
 
 @cache
-def _plus() -> QPainterPath:
-    path = QPainterPath(QPointF(0.5, 0.46))
-    path.lineTo(0.5, 0.7)
-    path.moveTo(0.38, 0.58)
-    path.lineTo(0.62, 0.58)
+def _dot() -> QPainterPath:
+    path = QPainterPath()
+    path.addEllipse(QPointF(0.5, 0.57), 0.115, 0.115)
     return path

@@ -92,11 +92,10 @@ class Picture:
 
     def _caption_heights(self, style: Style, side: Side, width: float) -> tuple[float, float]:
         """Heights of the title and of the count, so that both arrays can begin on one line."""
-        count = f"{side.count} {side.percent}"
-        return (
-            text_height(side.title, style.font("strong"), width),
-            text_height(count if self._breaks(style, side, width) else side.count, style.font("figure"), width),
-        )
+        count = text_height(side.count, style.font("figure"), width)
+        if self._breaks(style, side, width):
+            count += text_height(side.percent, style.font("body"), width)
+        return text_height(side.title, style.font("strong"), width), count
 
     def _breaks(self, style: Style, side: Side, width: float) -> bool:
         """Whether count and percentage need more than one line."""
@@ -141,12 +140,12 @@ class Picture:
         if painter is None:
             return
         figure, body = style.font("figure"), style.font("body")
+        tall = draw_text(painter, x, y, width, side.count, figure, style.palette.ink)
         if self._breaks(style, side, width):
-            draw_text(painter, x, y, width, f"{side.count} {side.percent}", figure, style.palette.ink)
+            draw_text(painter, x, y + tall, width, side.percent, body, style.palette.muted)
             return
-        draw_text(painter, x, y, width, side.count, figure, style.palette.ink)
         after = text_width(f"{side.count} ", figure)
-        drop = text_height(side.count, figure, width) - text_height(side.percent, body, width)
+        drop = tall - text_height(side.percent, body, width)
         lift = style.px(3)
         draw_text(painter, x + after, y + drop - lift, width - after, side.percent, body, style.palette.muted)
 
@@ -170,7 +169,15 @@ class Picture:
         return y + line - top
 
     def _text(
-        self, painter: QPainter | None, style: Style, x: float, y: float, width: float, text: str, role: str, colour: str
+        self,
+        painter: QPainter | None,
+        style: Style,
+        x: float,
+        y: float,
+        width: float,
+        text: str,
+        role: str,
+        colour: str,
     ) -> float:
         font = style.font(role)
         if painter is None:

@@ -42,9 +42,7 @@ def _x(area: QRectF, place: float) -> float:
     return area.left() + area.width() * place
 
 
-def _draw_interval(
-    painter: QPainter, area: QRectF, middle: float, low: float, high: float, palette: Palette
-) -> None:
+def _draw_interval(painter: QPainter, area: QRectF, middle: float, low: float, high: float, palette: Palette) -> None:
     left, right = _x(area, min(max(low, 0.0), 1.0)), _x(area, min(max(high, 0.0), 1.0))
     colour = QColor(palette.accent)
     painter.setPen(QPen(colour, 3, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))

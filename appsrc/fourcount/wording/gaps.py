@@ -14,8 +14,7 @@ GAP_TEXTS = {
     "empty-group": "There is nobody in this group.",
     "no-events": "Nobody in either group had the event, so this figure is not determined.",
     "no-non-events": "Everybody in both groups had the event, so this figure is not determined.",
-    "zero-width": "The bare formula would give an interval of zero width, which says more than the data can; "
-    "the score intervals give a real one.",
+    "zero-width": "An interval of zero width is withheld; the score family gives a real one.",
     "beyond-one": "The risk would pass 100% here; where a risk ratio is carried, the odds ratio can be.",
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     # the design, the table, the patient

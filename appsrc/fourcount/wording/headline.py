@@ -13,6 +13,7 @@ from fourcount.appraisal.findings import Gap, Interval, Range
 from fourcount.wording import numbers
 
 DENOMINATORS = tuple(10**power for power in range(2, 10))
+ONE_PERSON = 1 - 1e-9  # a difference of less than one whole person is not said in whole people
 FINEST_FOR_LIMITS = 10_000  # for an interval's sake alone the sentence does not leave numbers one can picture
 
 
@@ -45,7 +46,7 @@ def _true_at(denominator: int, reference: float, index: float, difference: float
     apart = numbers.people(difference, denominator)
     return (
         abs(first - second) == apart
-        and (apart > 0) == (difference != 0)
+        and (difference == 0 or abs(difference) * denominator >= ONE_PERSON)
         and all((n > 0) == (risk > 0) for n, risk in ((first, reference), (second, index)))
         and all((n < denominator) == (risk < 1) for n, risk in ((first, reference), (second, index)))
     )

@@ -25,7 +25,7 @@ HINTS = {
     "source_text": "table, page or figure · no patient details",
     "words": "“fell at least once”",
     "span_text": "“12 months”",
-    "starting_risk_source_text": "its source · no patient details",
+    "starting_risk_source_text": "source · no patient data",
     "label": "group name",
     "left_heading": "event",
     "right_heading": "no event",

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from typing import Literal
 
 from fourcount.appraisal.findings import Conversion, Counts, Figure, Gap, Interval, NumberNeeded, OutcomeFindings
@@ -37,7 +37,7 @@ UNDER_THE_FOLD = ("odds_reference", "odds_index")
 
 NO_SPAN = "time span not given"
 HALF_ADDED = "adjusted: half added to each count"
-APPROXIMATE = "score method, approximate"
+APPROXIMATE = "score, approximate"
 ALWAYS_SCORE = ("risk_difference", "risk_ratio")  # there is no exact interval of these in the exact family
 NOT_DETERMINED = "not determined"
 WITHHELD = "withheld"
@@ -70,6 +70,18 @@ def measure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices)
     """All lines in screen order: difference first, ratios after it, the odds ratio last unless it is alone."""
     order = CASE_CONTROL_ORDER if outcome.design == "case-control" else SCREEN_ORDER
     return tuple(_line(key, outcome, findings, choices) for key in order)
+
+
+def told_once(lines: tuple[MeasureLine, ...]) -> tuple[MeasureLine, ...]:
+    """Neighbours that are withheld for one and the same reason become one line with all their names."""
+    result: list[MeasureLine] = []
+    for line in lines:
+        before = result[-1] if result else None
+        if before and line.withheld and line.withheld == before.withheld:
+            result[-1] = replace(before, name=f"{before.name}\n{line.name}")
+        else:
+            result.append(line)
+    return tuple(result)
 
 
 def family_name(key: str, choices: Choices) -> str:

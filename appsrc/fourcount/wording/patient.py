@@ -4,7 +4,9 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
+from fourcount.appraisal.drawn import other_side
 from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings, PatientFindings
+from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
 from fourcount.wording import limits, names, numbers
@@ -14,6 +16,7 @@ from fourcount.wording.headline import choose
 LONGEST_KEY = 40
 NOT_GIVEN = "not given"
 TOO_SMALL = "too small to draw"
+UNWELCOME_DRAWN = "The figures counted here are those with the unwelcome outcome."
 WHICH_PEOPLE = "We cannot say which people."
 CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
 DO_NOT_ADD_UP = "Whole numbers are rounded, so they need not add up."
@@ -56,6 +59,8 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         return PatientWords(
             without_title=without_title, with_title=with_title, detail=gap_text(patient), missing=missing(outcome)
         )
+    named = outcome
+    outcome, patient = drawn(outcome, patient)
     people = denominator or _text_only_denominator(patient)
     change = patient.difference.estimate
     return PatientWords(
@@ -68,13 +73,13 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         without_other=_others(patient.without, people, outcome),
         with_other=_others(patient.with_, people, outcome),
         key_event=names.event_key(outcome),
-        key_avoided=_key("avoided", outcome) if not isinstance(change, Gap) and change < 0 else "",
-        key_added=_key("added", outcome) if not isinstance(change, Gap) and change > 0 else "",
+        key_avoided=_key("avoided", named) if not isinstance(change, Gap) and change < 0 else "",
+        key_added=_key("added", named) if not isinstance(change, Gap) and change > 0 else "",
         key_other=names.other_key(outcome),
-        summary_bold=_change(patient.difference, people),
+        summary_bold=_change_said(outcome, patient.difference, people),
         summary=_summary(outcome, patient, people),
-        detail=_detail(patient, people),
-        scale="" if isinstance(change, Gap) else _scale(denominator),
+        detail=_detail(named, patient, people),
+        scale="" if isinstance(change, Gap) else _scale(named, denominator),
         missing=missing(outcome),
         picture_sentence=_picture_sentence(outcome, patient, people),
     )
@@ -84,6 +89,11 @@ def picture_heading(record: Record, outcome: Outcome) -> str:
     """What a picture that travels by itself is about: the outcome's name, the paper's title and where it stands."""
     parts = (outcome.name_text, record.title_text, record.source_text)
     return " · ".join(text.strip() for text in parts if text.strip())
+
+
+def drawn(outcome: Outcome, patient: PatientFindings) -> tuple[Outcome, PatientFindings]:
+    """The outcome and the risks as a picture draws them: always those of the unwelcome outcome."""
+    return (count_other_outcome(outcome), other_side(patient)) if outcome.welcome else (outcome, patient)
 
 
 def missing(outcome: Outcome) -> tuple[str, ...]:
@@ -149,9 +159,7 @@ def _others(figure: Figure, people: int, outcome: Outcome) -> str:
 
 
 def _key(verb: str, outcome: Outcome) -> str:
-    name = names.mid_sentence(outcome.name_text.strip())
-    if outcome.welcome and verb == "avoided":
-        verb = "lost"
+    name = "" if outcome.welcome else names.mid_sentence(outcome.name_text.strip())
     return f"{name} {verb}, on balance" if name and len(name) <= LONGEST_KEY else f"{verb}, on balance"
 
 
@@ -163,6 +171,12 @@ def _change(difference: Figure, people: int) -> str:
     if change == 0:
         return f"The same number in {numbers.whole(people)}"
     return f"{_size(change, people)} {limits.side(change)} in {numbers.whole(people)}"
+
+
+def _change_said(outcome: Outcome, difference: Figure, people: int) -> str:
+    """``6 fewer in 100 fell at least once``."""
+    change = _change(difference, people)
+    return f"{change} {names.event_words(outcome)}" if change else ""
 
 
 def _size(change: float, people: int) -> str:
@@ -185,14 +199,16 @@ def _summary(outcome: Outcome, patient: PatientFindings, people: int) -> str:
     return ", ".join(part for part in parts if part)
 
 
-def _detail(patient: PatientFindings, people: int) -> str:
+def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
     """What stands under the summary: number needed, relative words, and what the range leaves out."""
     if isinstance(patient.with_.estimate, Gap):
         return _reason(patient.with_.estimate, patient)
-    sentences = [_number_needed(patient.number_needed), _relative(patient.risk_ratio)]
+    sentences = [_number_needed(patient.number_needed), _relative(named, patient.risk_ratio)]
     sentences += [_reason(gap, patient) for gap in _gaps(patient.difference)]
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
-        sentences.append(f"The range leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
+        sentences.append(
+            f"The range leaves out that {numbers.percent_given(1 - patient.baseline if named.welcome else patient.baseline)} is itself uncertain."
+        )
     if not _adds_up(patient, people):
         sentences.append(DO_NOT_ADD_UP)
     return " ".join(part for part in dict.fromkeys(sentences) if part)
@@ -206,7 +222,7 @@ def _number_needed(needed: NumberNeeded | Gap) -> str:
     return f"{kind} at this starting risk {numbers.number_needed(needed.estimate)} ({interval})."
 
 
-def _relative(ratio: Figure) -> str:
+def _relative(named: Outcome, ratio: Figure) -> str:
     if isinstance(ratio.estimate, Gap):
         return ""
     change = ratio.estimate - 1
@@ -214,6 +230,10 @@ def _relative(ratio: Figure) -> str:
         return ""
     word = limits.LOWER if change < 0 else limits.HIGHER
     interval = limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
+    if named.welcome:
+        return (
+            f"The welcome outcome itself is, in relative words, {numbers.percent_whole(abs(change))} {word}{interval}."
+        )
     return f"In relative words {numbers.percent_whole(abs(change))} {word}{interval}."
 
 
@@ -236,10 +256,14 @@ def _adds_up(patient: PatientFindings, people: int) -> bool:
     return any(isinstance(part, Gap) for part in parts) or abs(rounded[1] - rounded[0]) == rounded[2]
 
 
-def _scale(denominator: int | None) -> str:
+def _scale(named: Outcome, denominator: int | None) -> str:
+    """What has to be said of the picture itself: what it counts, how many people it shows, or why it shows none."""
+    parts = [UNWELCOME_DRAWN] if named.welcome else []
     if denominator is None:
-        return TOO_SMALL
-    return "" if denominator == 100 else f"Each picture shows {numbers.whole(denominator)} people."
+        parts.append(f"{TOO_SMALL[0].upper()}{TOO_SMALL[1:]} as people.")
+    elif denominator != 100:
+        parts.append(f"Each picture shows {numbers.whole(denominator)} people.")
+    return " ".join(parts)
 
 
 def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -> str:
