@@ -178,7 +178,7 @@ def _open_window() -> int:
         return FAILED
     from fourcount.face.application import run
 
-    return int(run(None))
+    return int(run())
 
 
 def _display_in(environment: Mapping[str, str]) -> bool:

@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 import signal
-import sys
 from pathlib import Path
 
 from PySide6.QtWidgets import QApplication
@@ -15,7 +14,7 @@ from fourcount.face.look import Look
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings, own_folder
 from fourcount.face.window import MainWindow
-from fourcount.record.paper import Choices, Record
+from fourcount.record.paper import Record
 
 
 def make_application(arguments: list[str]) -> QApplication:
@@ -35,8 +34,7 @@ def make_window(settings_folder: Path, record: Record | None = None) -> MainWind
     """A window on a record, or on an empty one with the choices last used."""
     settings = Settings(settings_folder)
     if record is None:
-        family, level = settings.choices()
-        record = Record(choices=Choices(family=family, level=level))
+        record = Record(choices=settings.choices())
     look = Look(settings.zoom(), settings.appearance())
     window = MainWindow(Session(record), look, settings, Later())
     look.setParent(window)
@@ -44,9 +42,9 @@ def make_window(settings_folder: Path, record: Record | None = None) -> MainWind
     return window
 
 
-def run(path: str | None = None) -> int:
+def run() -> int:
     """Open the window and stay until it is closed."""
-    application = make_application([sys.argv[0]])
+    application = make_application(["fourcount"])
     folder = own_folder()
     window = make_window(folder)
     listener = ErrorListener(folder)

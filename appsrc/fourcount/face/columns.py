@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from itertools import pairwise
 from typing import NamedTuple
 
 from PySide6.QtCore import QRect, QSize, Qt
@@ -81,7 +82,7 @@ class ColumnsLayout(QLayout):
     def _widths(self, width: int) -> list[int]:
         shares = self.arrangement(width).shares
         edges = [round(width * sum(shares[:i]) / sum(shares)) for i in range(len(shares) + 1)]
-        return [right - left for left, right in zip(edges, edges[1:], strict=False)]
+        return [right - left for left, right in pairwise(edges)]
 
     def _heights(self, width: int) -> list[list[tuple[int, int]]]:
         """For each pillar, its columns with the heights they ask for."""

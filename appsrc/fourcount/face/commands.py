@@ -1,118 +1,135 @@
-"""What each command does to the session and the clipboard: one small function for each, no widget but dialogs."""
+"""What each command and each choice does to the record: one small slot for each."""
 
 from __future__ import annotations
 
-from datetime import date
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QMimeData
-from PySide6.QtGui import QGuiApplication
+from PySide6.QtCore import QObject, Signal
+from PySide6.QtWidgets import QWidget
 
-from fourcount import __version__
+from fourcount.face import clipboard, dialogs
 from fourcount.face.session import Session
 from fourcount.ink.style import Style
 from fourcount.record import editing
-from fourcount.record.outcome import EventsAndOthers, EventsOfTotal
-from fourcount.record.paper import Record
+from fourcount.record.outcome import Design, Effect, EventsAndOthers, EventsOfTotal, Layout
+from fourcount.record.paper import Family, Record
+from fourcount.wording import labels
 
 if TYPE_CHECKING:
-    from fourcount.ink.picture import Picture
+    from fourcount.face.for_one_patient import PictureView
 
 
-def new_table(session: Session) -> None:
-    """Begin with an empty record that keeps the choice of intervals; undo brings the last one back."""
-    session.change_record(Record(choices=session.record.choices))
+class Commands(QObject):
+    """The slots of the menus' record commands and of the choices in the columns.
 
+    **Signals**
+        cell_wanted: the table begins anew; bring the cursor to its first cell.
+        noticed: a short notice of what was just done. Carries its sentence.
+    """
 
-def open_example(session: Session) -> None:
-    """Show the worked example under the same choice of intervals; undo brings the last record back."""
-    from fourcount.wording.example import worked_example
+    cell_wanted = Signal()
+    noticed = Signal(str)
 
-    example = worked_example()
-    session.change_record(Record(
-        title_text=example.title_text,
-        source_text=example.source_text,
-        outcomes=example.outcomes,
-        choices=session.record.choices,
-    ))  # fmt: skip
+    def __init__(self, session: Session, style: Style, window: QWidget) -> None:
+        super().__init__(window)
+        self._session = session
+        self._style = style
+        self._window = window
+        self.picture: PictureView | None = None
 
+    def new_table(self) -> None:
+        """Begin with an empty record that keeps the choice of intervals; undo brings the last one back."""
+        self._session.change_record(Record(choices=self._session.record.choices))
+        self.cell_wanted.emit()
 
-def swap_groups(session: Session) -> None:
-    """Make the other group the index group."""
-    session.change_outcome(editing.swap_groups(session.outcome))
+    def open_example(self) -> None:
+        """Show the worked example under the same choice of intervals; undo brings the last record back."""
+        from fourcount.wording.example import worked_example
 
+        self._session.change_record(editing.with_choices(worked_example(), self._session.record.choices))
+        self.cell_wanted.emit()
 
-def count_other_outcome(session: Session) -> None:
-    """Count the other column."""
-    session.change_outcome(editing.count_other_outcome(session.outcome))
+    def swap_groups(self) -> None:
+        """Make the other group the index group."""
+        self._session.change_outcome(editing.swap_groups(self._session.outcome))
 
+    def count_other_outcome(self) -> None:
+        """Count the other column."""
+        self._session.change_outcome(editing.count_other_outcome(self._session.outcome))
 
-def clear_counts(session: Session) -> None:
-    """Empty the four cells."""
-    session.change_outcome(editing.clear_table(session.outcome))
+    def clear_counts(self) -> None:
+        """Empty the four cells."""
+        self._session.change_outcome(editing.clear_table(self._session.outcome))
+        self.cell_wanted.emit()
 
+    def change_form(self) -> None:
+        """Go from ``38 · 374`` to ``38 of 412``, or back."""
+        now = self._session.outcome.table
+        self.choose_form("events-and-others" if isinstance(now, EventsOfTotal) else "events-of-total")
 
-def change_form(session: Session) -> None:
-    """Go from ``38 · 374`` to ``38 of 412``, or back."""
-    now = session.outcome.table
-    choose_form(session, "events-and-others" if isinstance(now, EventsOfTotal) else "events-of-total")
+    def change_layout(self) -> None:
+        """Run the groups the other way."""
+        self.choose_layout("across" if self._session.outcome.layout == "down" else "down")
 
+    def choose_design(self, key: Design) -> None:
+        """Take a study design."""
+        self._session.change_outcome(editing.with_design(self._session.outcome, key))
 
-def choose_form(session: Session, form: str) -> None:
-    """Take a form of print by its key."""
-    kind = EventsOfTotal if form == "events-of-total" else EventsAndOthers
-    session.change_outcome(editing.in_form(session.outcome, kind))
+    def choose_welcome(self, key: str) -> None:
+        """Say whether the counted outcome is a good one."""
+        self._session.change_outcome(editing.with_welcome(self._session.outcome, key == "welcome"))
 
+    def choose_form(self, key: str) -> None:
+        """Take a form of print by its key."""
+        kind = EventsOfTotal if key == "events-of-total" else EventsAndOthers
+        self._session.change_outcome(editing.in_form(self._session.outcome, kind))
 
-def change_layout(session: Session) -> None:
-    """Run the groups the other way."""
-    other = "across" if session.outcome.layout == "down" else "down"
-    session.change_outcome(editing.with_layout(session.outcome, other))
+    def choose_layout(self, key: Layout) -> None:
+        """Run the groups down or across."""
+        self._session.change_outcome(editing.with_layout(self._session.outcome, key))
 
+    def choose_effect(self, key: Effect) -> None:
+        """Take the effect that is carried to the patient."""
+        self._session.change_outcome(editing.with_effect(self._session.outcome, key))
 
-def copy_text(session: Session) -> bool:
-    """Put the findings as plain text on the clipboard; False while there are none."""
-    from fourcount.publish.prose import prose
+    def choose_family(self, key: Family) -> None:
+        """Take a family of intervals."""
+        self._session.change_record(editing.with_family(self._session.record, key))
 
-    if not _whole(session) or session.findings is None:
-        return False
-    text = prose(session.record, session.outcome, session.findings, version=__version__, today=date.today())
-    QGuiApplication.clipboard().setText(text)
-    return True
+    def choose_level(self, key: str) -> None:
+        """Take a confidence level, a fraction as text, or ask for another one."""
+        if key == "other":
+            self._ask_level()
+        else:
+            self._session.change_record(editing.with_level(self._session.record, float(key)))
 
+    def copy_text(self) -> None:
+        """Copy the findings as text."""
+        self._tell("copy-text", clipboard.copy_text(self._session))
 
-def copy_table(session: Session) -> bool:
-    """Put the findings on the clipboard as a table for a spreadsheet or a letter; False while there are none."""
-    from fourcount.publish.sheet import html, tsv
+    def copy_table(self) -> None:
+        """Copy the findings as a table."""
+        self._tell("copy-table", clipboard.copy_table(self._session))
 
-    if not _whole(session) or session.findings is None:
-        return False
-    data = QMimeData()
-    data.setText(tsv(session.outcome, session.findings, session.record.choices))
-    data.setHtml(html(session.outcome, session.findings, session.record.choices))
-    QGuiApplication.clipboard().setMimeData(data)
-    return True
+    def copy_picture(self) -> None:
+        """Copy the picture of the patient as people, or as bars where it is drawn so."""
+        picture = self.picture.picture if self.picture else None
+        self._tell("copy-picture", clipboard.copy_picture(self._session, picture, self._style))
 
+    def _tell(self, key: str, done: bool) -> None:
+        self.noticed.emit(labels.COPIED[key] if done else labels.NOTHING_TO_COPY)
 
-def copy_picture(session: Session, picture: Picture | None, style: Style) -> bool:
-    """Put the picture on the clipboard, with its sentences and cautions in it; False while there is none."""
-    from fourcount.ink.picture import as_image
-    from fourcount.wording.patient import picture_heading
-    from fourcount.wording.cautions import STANDING
+    def _ask_level(self) -> None:
+        """Ask until a level can be read or the question is put away."""
+        from fourcount.record.entry.level import read_level
+        from fourcount.record.entry.readings import Proportion, Unreadable
+        from fourcount.wording.gaps import mark_text
 
-    if picture is None:
-        return False
-    image = as_image(
-        picture,
-        style,
-        picture_heading(session.record, session.outcome),
-        f"{STANDING} Fourcount {__version__}, {date.today():%Y-%m-%d}",
-    )
-    QGuiApplication.clipboard().setImage(image)
-    return True
-
-
-def _whole(session: Session) -> bool:
-    from fourcount.appraisal.findings import Counts
-
-    return session.findings is not None and isinstance(session.findings.counts, Counts)
+        now, problem = f"{100 * self._session.record.choices.level:g}", ""
+        while (text := dialogs.ask_level(self._window, now, problem)) is not None:
+            reading = read_level(text)
+            if isinstance(reading, Proportion):
+                self._session.change_record(editing.with_level(self._session.record, reading.value))
+                break
+            now, problem = text, mark_text(reading) if isinstance(reading, Unreadable) else ""
+        self._session.announce()

@@ -11,8 +11,6 @@ from fourcount import __version__
 from fourcount.wording import labels
 
 if TYPE_CHECKING:
-    from PySide6.QtGui import QAction
-
     from fourcount.face.help_window import HelpWindow, Part
     from fourcount.face.look import Look
 
@@ -47,7 +45,8 @@ def methods_window(look: Look, parent: QWidget) -> HelpWindow:
         parts.append(("figure", heading))
         for title, formula, source, note in entries:
             parts.append(("strong", title))
-            parts.extend((role, text) for role, text in (("body", formula), ("body", note), ("small", source)) if text)
+            texts: tuple[Part, ...] = (("body", formula), ("body", note), ("small", source))
+            parts.extend(part for part in texts if part[1])
     parts.append(("figure", labels.HELP_LIMITS))
     parts.extend(("body", sentence) for sentence in (*limits_of_the_program(), *STANDING_FULL))
     return _window(look, parent, labels.HELP_TITLES["methods"], parts)

@@ -8,7 +8,8 @@ from PySide6.QtCore import QEvent, QRect, QSize, Qt, Signal
 from PySide6.QtGui import QContextMenuEvent, QFocusEvent, QKeyEvent, QKeySequence, QPainter, QPaintEvent, QPen
 from PySide6.QtWidgets import QComboBox, QLineEdit, QSizePolicy, QStyle, QStyleOptionComboBox, QWidget
 
-from fourcount.face.look import Look, Role
+from fourcount.face.look import Look
+from fourcount.ink.style import Role
 
 UNDOING = (QKeySequence.StandardKey.Undo, QKeySequence.StandardKey.Redo)
 
@@ -73,11 +74,12 @@ class TextField(QLineEdit):
         return QSize(self._look.px(40), self._look.px(30))
 
     def event(self, event: QEvent) -> bool:
-        if event.type() == QEvent.Type.ShortcutOverride and isinstance(event, QKeyEvent):
-            if any(event.matches(key) for key in UNDOING):
-                event.ignore()
-                return False
-        return super().event(event)
+        if event.type() != QEvent.Type.ShortcutOverride or not isinstance(event, QKeyEvent):
+            return super().event(event)
+        if not any(event.matches(key) for key in UNDOING):
+            return super().event(event)
+        event.ignore()
+        return False
 
     def keyPressEvent(self, event: QKeyEvent) -> None:
         if any(event.matches(key) for key in UNDOING):

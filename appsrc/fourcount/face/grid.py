@@ -9,7 +9,8 @@ from PySide6.QtGui import QFocusEvent, QFontMetrics, QKeyEvent, QPainter, QPaint
 from PySide6.QtWidgets import QGridLayout, QLabel, QSizePolicy, QWidget
 
 from fourcount.face.fields import QuietField, TextField
-from fourcount.face.look import Look, Role
+from fourcount.face.look import Look
+from fourcount.ink.style import Role
 from fourcount.record.outcome import CELLS, EventsOfTotal, Outcome
 from fourcount.wording import labels
 

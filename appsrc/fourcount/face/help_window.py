@@ -8,7 +8,8 @@ from PySide6.QtCore import Qt
 from PySide6.QtGui import QTextBlockFormat, QTextCharFormat, QTextCursor
 from PySide6.QtWidgets import QDialog, QDialogButtonBox, QTextEdit, QVBoxLayout, QWidget
 
-from fourcount.face.look import Look, Role
+from fourcount.face.look import Look
+from fourcount.ink.style import Role
 
 Part = tuple[Role, str]
 """A paragraph: the role of its font, and its text."""

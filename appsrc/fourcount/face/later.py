@@ -3,12 +3,14 @@
 from __future__ import annotations
 
 import threading
+from collections.abc import Callable
+from contextlib import suppress
+from importlib import import_module
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QObject, Qt, Signal
+from PySide6.QtCore import QObject, Qt, Signal, SignalInstance
 
 if TYPE_CHECKING:
-    from fourcount.appraisal.findings import OutcomeFindings
     from fourcount.record.outcome import Outcome
     from fourcount.record.paper import Choices
 
@@ -53,17 +55,15 @@ class Later(QObject):
             self._closed = True
             self._wanted = None
 
-    def _start(self, work: object) -> None:
+    def _start(self, work: Callable[[], None]) -> None:
         threading.Thread(target=work, daemon=True, name="fourcount-later").start()
 
     def _load(self) -> None:
         try:
-            import numpy
-            import scipy.special
-
-            assert numpy.__name__ and scipy.special.__name__
+            import_module("numpy")
+            import_module("scipy.special")
             self._tell(self.loaded)
-        except Exception as error:  # whatever it is, the window's thread reports it
+        except Exception as error:  # noqa: BLE001 - whatever it is, the window's thread reports it
             self._tell(self.failed, error)
 
     def _compute(self) -> None:
@@ -77,18 +77,16 @@ class Later(QObject):
                     return
             try:
                 self._tell(self.arrived, *wanted, appraise(*wanted))
-            except Exception as error:  # whatever it is, the window's thread reports it
+            except Exception as error:  # noqa: BLE001 - whatever it is, the window's thread reports it
                 self._tell(self.failed, error)
 
-    def _tell(self, signal: object, *values: object) -> None:
+    def _tell(self, signal: SignalInstance, *values: object) -> None:
         """Emit unless the window is gone."""
         with self._lock:
             closed = self._closed
         if not closed:
-            try:
-                signal.emit(*values)  # type: ignore[attr-defined]
-            except RuntimeError:  # the window was closed between the question and the answer
-                pass
+            with suppress(RuntimeError):  # the window was closed between the question and the answer
+                signal.emit(*values)
 
     def _on_failed(self, error: BaseException) -> None:
         raise error

@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from PySide6.QtCore import QSize, Qt
-from PySide6.QtGui import QAction, QPainter, QPaintEvent, QPen
+from PySide6.QtGui import QAction, QKeyEvent, QPainter, QPaintEvent, QPen
 from PySide6.QtWidgets import QAbstractButton, QSizePolicy
 
 from fourcount.face.look import Look
@@ -40,7 +40,7 @@ class Link(QAbstractButton):
     def sizeHint(self) -> QSize:
         return QSize(self.fontMetrics().horizontalAdvance(self.text()) + 2, self._look.px(26))
 
-    def keyPressEvent(self, event) -> None:  # noqa: ANN001 - Qt's own signature
+    def keyPressEvent(self, event: QKeyEvent) -> None:
         if event.key() in (Qt.Key.Key_Return, Qt.Key.Key_Enter):
             self.click()
             return

@@ -2,14 +2,11 @@
 
 from __future__ import annotations
 
-from typing import Literal
-
 from PySide6.QtCore import QObject, Qt, Signal
 from PySide6.QtGui import QColor, QFont, QFontInfo, QGuiApplication, QPalette
 
 from fourcount.ink.palette import DARK, LIGHT, Palette
-
-Role = Literal["body", "small", "head", "sentence", "cell", "estimate", "figure", "strong", "total"]
+from fourcount.ink.style import Role
 
 SIZES: dict[Role, int] = {
     "body": 13,

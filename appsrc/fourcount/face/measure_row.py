@@ -4,16 +4,15 @@ from __future__ import annotations
 
 from typing import NamedTuple
 
-from PySide6.QtCore import QRectF, QSize, Qt, Signal
-from PySide6.QtGui import QEnterEvent, QFocusEvent, QKeyEvent, QMouseEvent, QPainter, QPaintEvent, QPen, QResizeEvent
-from PySide6.QtCore import QEvent
+from PySide6.QtCore import QEvent, QRectF, QSize, Qt, Signal
+from PySide6.QtGui import QEnterEvent, QFocusEvent, QKeyEvent, QMouseEvent, QPainter, QPaintEvent, QPen
 from PySide6.QtWidgets import QSizePolicy, QWidget
 
 from fourcount.face.look import Look
 from fourcount.ink.strips import draw_strip
+from fourcount.ink.style import Role
 from fourcount.ink.typeset import CENTRE, LEFT, RIGHT, draw_text, text_height, text_width
 from fourcount.picture.scales import Scale
-from fourcount.wording import labels
 from fourcount.wording.lines import MeasureLine
 
 ONE_LINE_FROM = 430
@@ -212,7 +211,7 @@ class MeasureRow(QWidget):
         return y + tall
 
     def _text(
-        self, painter: QPainter | None, x: float, y: float, width: float, text: str, role: str, colour: str
+        self, painter: QPainter | None, x: float, y: float, width: float, text: str, role: Role, colour: str
     ) -> float:
         if not text:
             return 0.0

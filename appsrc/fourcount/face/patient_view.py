@@ -103,7 +103,7 @@ def _effect_words(findings: OutcomeFindings) -> dict[str, str]:
     result = {}
     for key, name in labels.EFFECTS.items():
         figure = findings.measures[key]
-        known = isinstance(figure, Figure) and not isinstance(figure.estimate, Gap)
-        value = numbers.ratio(figure.estimate) if known else ""
-        result[key] = labels.EFFECT_KEPT.format(effect=name, value=value) if value else name
+        result[key] = name
+        if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
+            result[key] = labels.EFFECT_KEPT.format(effect=name, value=numbers.ratio(figure.estimate))
     return result

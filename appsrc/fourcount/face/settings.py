@@ -7,6 +7,8 @@ from pathlib import Path
 
 from PySide6.QtCore import QByteArray, QSettings, QStandardPaths
 
+from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices
+
 FOLDER_VARIABLE = "FOURCOUNT_SETTINGS_FOLDER"
 """An environment variable that names another folder for settings and log."""
 
@@ -14,8 +16,7 @@ FOLDER_VARIABLE = "FOURCOUNT_SETTINGS_FOLDER"
 def own_folder() -> Path:
     """The folder for settings and the log of errors, made if it is not there."""
     location = QStandardPaths.writableLocation(QStandardPaths.StandardLocation.GenericConfigLocation)
-    folder = Path(os.environ.get(FOLDER_VARIABLE) or Path(location) / "fourcount")
-    return folder
+    return Path(os.environ.get(FOLDER_VARIABLE) or Path(location) / "fourcount")
 
 
 class Settings:
@@ -43,16 +44,15 @@ class Settings:
         value = self._store.value("geometry", QByteArray())
         return value if isinstance(value, QByteArray) else QByteArray()
 
-    def choices(self) -> tuple[str, float]:
+    def choices(self) -> Choices:
         """The family and level that a new record starts with."""
         family = str(self._store.value("family", "score"))
         try:
             level = float(str(self._store.value("level", 0.95)))
         except ValueError:
             level = 0.95
-        return (family if family in ("score", "textbook", "exact") else "score"), (
-            level if 0.8 <= level <= 0.999 else 0.95
-        )
+        known = next((name for name in FAMILIES if name == family), FAMILIES[0])
+        return Choices(family=known, level=level if LOWEST_LEVEL <= level <= HIGHEST_LEVEL else Choices().level)
 
     def keep(self, **values: object) -> None:
         """Remember values by name."""

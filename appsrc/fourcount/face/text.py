@@ -5,7 +5,8 @@ from __future__ import annotations
 from PySide6.QtCore import QSize, Qt
 from PySide6.QtWidgets import QLabel, QSizePolicy
 
-from fourcount.face.look import Look, Role
+from fourcount.face.look import Look
+from fourcount.ink.style import Role
 
 
 class Words(QLabel):

@@ -2,15 +2,19 @@
 
 from __future__ import annotations
 
-from PySide6.QtCore import QEvent, QSize, Qt, QTimer, Signal
-from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QKeyEvent, QPaintEvent
+from itertools import pairwise
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import QSize, Qt, QTimer, Signal
+from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QKeyEvent, QPaintEvent, QResizeEvent
 from PySide6.QtWidgets import QApplication, QLineEdit, QMainWindow, QVBoxLayout, QWidget
 
 from fourcount.face import actions as commands_table
-from fourcount.face import commands, dialogs
+from fourcount.face import dialogs
 from fourcount.face.as_printed import AsPrinted
 from fourcount.face.cautions_strip import CautionsStrip
 from fourcount.face.columns import Page, PageScroll
+from fourcount.face.commands import Commands
 from fourcount.face.for_one_patient import ForOnePatient
 from fourcount.face.header import Banner, Header
 from fourcount.face.later import Later
@@ -18,11 +22,13 @@ from fourcount.face.look import APPEARANCES, Look
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
-from fourcount.record import editing
-from fourcount.record.outcome import CELLS
-from fourcount.record.paper import Record
+from fourcount.record.outcome import CELLS, Outcome
+from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
 from fourcount.wording.cautions import STANDING
+
+if TYPE_CHECKING:
+    from fourcount.appraisal.findings import OutcomeFindings
 
 FIRST_SIZE = QSize(1280, 800)
 SMALLEST_SIZE = QSize(480, 360)
@@ -45,12 +51,14 @@ class MainWindow(QMainWindow):
         self._later = later
         self._painted = False
         self._at_start = session.record
+        self.commands = Commands(session, look, self)
         self.actions_by_key = commands_table.make_actions(self)
         self.header = Header(look)
         self.banner = Banner(look)
         self.printed = AsPrinted(look, self.actions_by_key)
         self.says = WhatItSays(look, self.actions_by_key)
         self.patient = ForOnePatient(look, self.actions_by_key)
+        self.commands.picture = self.patient.picture
         self.cautions = CautionsStrip(look, STANDING)
         self._build()
         self._connect_all()
@@ -103,7 +111,7 @@ class MainWindow(QMainWindow):
             patient.source, patient.effect, patient.summary, patient.detail, patient.copy,
             self.cautions,
         ]  # fmt: skip
-        for before, after in zip(order, order[1:], strict=False):
+        for before, after in pairwise(order):
             self.setTabOrder(before, after)
 
     def _connect_all(self) -> None:
@@ -111,14 +119,17 @@ class MainWindow(QMainWindow):
         for view in (self.header, self.printed, self.patient):
             view.edited.connect(self.session.edit_text)
             view.left.connect(self.session.end_run)
-        self.printed.design.chosen.connect(self._on_design_chosen)
-        self.printed.welcome.chosen.connect(self._on_welcome_chosen)
-        self.printed.form.chosen.connect(self._on_form_chosen)
-        self.printed.layout_choice.chosen.connect(self._on_layout_chosen)
-        self.printed.example_wanted.connect(self._on_example)
-        self.says.family_chosen.connect(self._on_family_chosen)
-        self.says.level_chosen.connect(self._on_level_chosen)
-        self.patient.effect_chosen.connect(self._on_effect_chosen)
+        do = self.commands
+        self.printed.design.chosen.connect(do.choose_design)
+        self.printed.welcome.chosen.connect(do.choose_welcome)
+        self.printed.form.chosen.connect(do.choose_form)
+        self.printed.layout_choice.chosen.connect(do.choose_layout)
+        self.printed.example_wanted.connect(do.open_example)
+        self.says.family_chosen.connect(do.choose_family)
+        self.says.level_chosen.connect(do.choose_level)
+        self.patient.effect_chosen.connect(do.choose_effect)
+        do.cell_wanted.connect(self._on_first_cell)
+        do.noticed.connect(self.header.notice.show_words)
         self.session.changed.connect(self._show_state)
         self.session.focus_wanted.connect(self._on_focus_wanted)
         self._later.arrived.connect(self._on_figures_arrived)
@@ -127,10 +138,10 @@ class MainWindow(QMainWindow):
         self.first_painted.connect(self._on_first_painted)
         self._appearances.triggered.connect(self._on_appearance_chosen)
         handlers = {
-            "new": self._on_new, "example": self._on_example, "quit": self.close, "undo": self.session.undo,
-            "redo": self.session.redo, "copy-text": self._on_copy_text, "copy-table": self._on_copy_table,
-            "copy-picture": self._on_copy_picture, "swap": self._on_swap, "count-other": self._on_count_other,
-            "form": self._on_form, "layout": self._on_layout, "clear": self._on_clear,
+            "new": do.new_table, "example": do.open_example, "quit": self.close, "undo": self.session.undo,
+            "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
+            "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
+            "form": do.change_form, "layout": do.change_layout, "clear": do.clear_counts,
             "first-cell": self._on_first_cell, "bigger": self._on_bigger, "smaller": self._on_smaller,
             "actual": self._on_actual, "bars": self._on_bars, "more": self._on_more, "methods": self._on_methods,
             "keys": self._on_keys, "about": self._on_about,
@@ -181,7 +192,7 @@ class MainWindow(QMainWindow):
             return
         super().keyPressEvent(event)
 
-    def resizeEvent(self, event: QEvent) -> None:
+    def resizeEvent(self, event: QResizeEvent) -> None:
         super().resizeEvent(event)
         self.cautions.fit()
 
@@ -216,7 +227,7 @@ class MainWindow(QMainWindow):
     def _on_libraries_loaded(self) -> None:
         self.session.announce()
 
-    def _on_figures_arrived(self, outcome: object, choices: object, findings: object) -> None:
+    def _on_figures_arrived(self, outcome: Outcome, choices: Choices, findings: OutcomeFindings) -> None:
         if choices == self.session.record.choices:
             self.session.take_findings(outcome, findings)
 
@@ -227,90 +238,11 @@ class MainWindow(QMainWindow):
             if getattr(widget, "field", "") == field:
                 widget.setFocus(Qt.FocusReason.OtherFocusReason)
 
-    def _on_design_chosen(self, key: str) -> None:
-        self.session.change_outcome(editing.with_design(self.session.outcome, key))
-
-    def _on_welcome_chosen(self, key: str) -> None:
-        self.session.change_outcome(editing.with_welcome(self.session.outcome, key == "welcome"))
-
-    def _on_form_chosen(self, key: str) -> None:
-        commands.choose_form(self.session, key)
-
-    def _on_layout_chosen(self, key: str) -> None:
-        self.session.change_outcome(editing.with_layout(self.session.outcome, key))
-
-    def _on_effect_chosen(self, key: str) -> None:
-        self.session.change_outcome(editing.with_effect(self.session.outcome, key))
-
-    def _on_family_chosen(self, key: str) -> None:
-        self.session.change_record(editing.with_family(self.session.record, key))
-
-    def _on_level_chosen(self, key: str) -> None:
-        if key == "other":
-            self._ask_level()
-        else:
-            self.session.change_record(editing.with_level(self.session.record, float(key)))
-
-    def _ask_level(self) -> None:
-        from fourcount.record.entry.level import read_level
-        from fourcount.record.entry.readings import Proportion, Unreadable
-        from fourcount.wording.gaps import mark_text
-
-        text: str | None = f"{100 * self.session.record.choices.level:g}"
-        problem = ""
-        while True:
-            text = dialogs.ask_level(self, text, problem)
-            if text is None:
-                break
-            reading = read_level(text)
-            if isinstance(reading, Proportion):
-                self.session.change_record(editing.with_level(self.session.record, reading.value))
-                break
-            problem = mark_text(reading) if isinstance(reading, Unreadable) else ""
-        self.session.announce()
-
-    def _on_new(self) -> None:
-        commands.new_table(self.session)
-        self._on_first_cell()
-
-    def _on_example(self) -> None:
-        commands.open_example(self.session)
-        self._on_first_cell()
-
-    def _on_swap(self) -> None:
-        commands.swap_groups(self.session)
-
-    def _on_count_other(self) -> None:
-        commands.count_other_outcome(self.session)
-
-    def _on_clear(self) -> None:
-        commands.clear_counts(self.session)
-        self._on_first_cell()
-
-    def _on_form(self) -> None:
-        commands.change_form(self.session)
-
-    def _on_layout(self) -> None:
-        commands.change_layout(self.session)
-
     def _on_first_cell(self) -> None:
         cell = self.printed.grid.cells[CELLS[0]]
         cell.setFocus(Qt.FocusReason.ShortcutFocusReason)
         cell.selectAll()
         self.page_scroll.ensureWidgetVisible(cell)
-
-    def _on_copy_text(self) -> None:
-        self._tell_copied("copy-text", commands.copy_text(self.session))
-
-    def _on_copy_table(self) -> None:
-        self._tell_copied("copy-table", commands.copy_table(self.session))
-
-    def _on_copy_picture(self) -> None:
-        done = commands.copy_picture(self.session, self.patient.picture.picture, self.look)
-        self._tell_copied("copy-picture", done)
-
-    def _tell_copied(self, key: str, done: bool) -> None:
-        self.header.notice.show_words(labels.COPIED[key] if done else labels.NOTHING_TO_COPY)
 
     def _on_bigger(self) -> None:
         self.look.step_zoom(1)

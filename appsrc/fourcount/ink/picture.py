@@ -9,7 +9,7 @@ from PySide6.QtGui import QImage, QPainter
 
 from fourcount.ink.arrays import array_height, draw_array, draw_bar
 from fourcount.ink.people import State, draw_icon
-from fourcount.ink.style import OnPaper, Style
+from fourcount.ink.style import OnPaper, Role, Style
 from fourcount.ink.typeset import draw_text, text_height, text_width
 from fourcount.picture.plan import Array, Plan
 from fourcount.picture.scales import risk_scale
@@ -22,7 +22,7 @@ class Side(NamedTuple):
     """The captions of one group: its title, the count, the percentage, and the other frame."""
 
     title: str
-    count: str
+    number: str
     percent: str
     other: str
 
@@ -92,14 +92,14 @@ class Picture:
 
     def _caption_heights(self, style: Style, side: Side, width: float) -> tuple[float, float]:
         """Heights of the title and of the count, so that both arrays can begin on one line."""
-        count = text_height(side.count, style.font("figure"), width)
+        count = text_height(side.number, style.font("figure"), width)
         if self._breaks(style, side, width):
             count += text_height(side.percent, style.font("body"), width)
         return text_height(side.title, style.font("strong"), width), count
 
     def _breaks(self, style: Style, side: Side, width: float) -> bool:
         """Whether count and percentage need more than one line."""
-        one_line = text_width(side.count, style.font("figure")) + text_width(f"  {side.percent}", style.font("body"))
+        one_line = text_width(side.number, style.font("figure")) + text_width(f"  {side.percent}", style.font("body"))
         return one_line > width
 
     def _draw_side(
@@ -140,11 +140,11 @@ class Picture:
         if painter is None:
             return
         figure, body = style.font("figure"), style.font("body")
-        tall = draw_text(painter, x, y, width, side.count, figure, style.palette.ink)
+        tall = draw_text(painter, x, y, width, side.number, figure, style.palette.ink)
         if self._breaks(style, side, width):
             draw_text(painter, x, y + tall, width, side.percent, body, style.palette.muted)
             return
-        after = text_width(f"{side.count} ", figure)
+        after = text_width(f"{side.number} ", figure)
         drop = tall - text_height(side.percent, body, width)
         lift = style.px(3)
         draw_text(painter, x + after, y + drop - lift, width - after, side.percent, body, style.palette.muted)
@@ -176,7 +176,7 @@ class Picture:
         y: float,
         width: float,
         text: str,
-        role: str,
+        role: Role,
         colour: str,
     ) -> float:
         font = style.font(role)
@@ -186,15 +186,15 @@ class Picture:
 
 
 def as_image(picture: Picture, style: Style, heading: str, cautions: str, width: int = 520, scale: int = 2) -> QImage:
-    """The picture alone on white paper, with its heading above and the sentences and cautions that belong to it below."""
+    """The picture alone on white paper: its heading above it, the sentences and cautions that belong to it below."""
     paper = OnPaper(style)
     margin = paper.px(28)
     wide = paper.px(width) - 2 * margin
-    lines = [(heading, "strong", paper.palette.ink)]
-    below = [(line, "body", paper.palette.ink) for line in picture.words.lines]
+    heads: list[tuple[str, Role, str]] = [(heading, "strong", paper.palette.ink)]
+    below: list[tuple[str, Role, str]] = [(line, "body", paper.palette.ink) for line in picture.words.lines]
     below.append((cautions, "small", paper.palette.muted))
     gap = paper.px(8)
-    tall = sum(text_height(text, paper.font(role), wide) + gap for text, role, _ in (*lines, *below))
+    tall = sum(text_height(text, paper.font(role), wide) + gap for text, role, _ in (*heads, *below))
     height = round(tall + picture.height(paper, wide) + 2 * margin + 2 * gap)
     image = QImage(QSize(paper.px(width), height) * scale, QImage.Format.Format_RGB32)
     image.setDevicePixelRatio(scale)

@@ -2,11 +2,14 @@
 
 from __future__ import annotations
 
-from typing import Protocol
+from typing import Literal, Protocol
 
 from PySide6.QtGui import QFont
 
 from fourcount.ink.palette import PAPER, Palette
+
+Role = Literal["body", "small", "head", "sentence", "cell", "estimate", "figure", "strong", "total"]
+"""What a text is for; each part has a size and a weight of its own."""
 
 
 class Style(Protocol):
@@ -14,8 +17,8 @@ class Style(Protocol):
 
     palette: Palette
 
-    def font(self, role: str, /) -> QFont:
-        """The font of a role ("body", "small", "strong", "figure")."""
+    def font(self, role: Role, /) -> QFont:
+        """The font of a role."""
 
     def px(self, pixels: float, /) -> int:
         """A length that grows with the text."""

@@ -26,7 +26,7 @@ from fourcount.record.outcome import (
     Patient,
     Table,
 )
-from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Family, Record
+from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family, Record
 
 Word = TypeVar("Word", bound=str)
 
@@ -108,6 +108,11 @@ def with_outcome(record: Record, index: int, outcome: Outcome) -> Record:
         raise IndexError(f"the record has no outcome at {index}")
     outcomes = record.outcomes
     return replace(record, outcomes=(*outcomes[:index], outcome, *outcomes[index + 1 :]))
+
+
+def with_choices(record: Record, choices: Choices) -> Record:
+    """The same paper under other choices of intervals."""
+    return replace(record, choices=choices)
 
 
 def with_family(record: Record, family: Family) -> Record:

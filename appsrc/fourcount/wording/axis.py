@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-
 FRACTIONS = {2.0: "½", 4.0: "¼"}
 
 

@@ -206,9 +206,8 @@ def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
     sentences = [_number_needed(patient.number_needed), _relative(named, patient.risk_ratio)]
     sentences += [_reason(gap, patient) for gap in _gaps(patient.difference)]
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
-        sentences.append(
-            f"The range leaves out that {numbers.percent_given(1 - patient.baseline if named.welcome else patient.baseline)} is itself uncertain."
-        )
+        typed = 1 - patient.baseline if named.welcome else patient.baseline
+        sentences.append(f"The range leaves out that {numbers.percent_given(typed)} is itself uncertain.")
     if not _adds_up(patient, people):
         sentences.append(DO_NOT_ADD_UP)
     return " ".join(part for part in dict.fromkeys(sentences) if part)

@@ -1,0 +1,60 @@
+"""What leaves the window through the clipboard: text, a table, a picture, each with its cautions."""
+
+from __future__ import annotations
+
+from datetime import date
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import QMimeData
+from PySide6.QtGui import QGuiApplication
+
+from fourcount import __version__
+from fourcount.face.session import Session
+from fourcount.ink.style import Style
+
+if TYPE_CHECKING:
+    from fourcount.ink.picture import Picture
+
+
+def copy_text(session: Session) -> bool:
+    """Put the findings as plain text on the clipboard; False while there are none."""
+    from fourcount.publish.prose import prose
+
+    if session.findings is None or not _whole(session):
+        return False
+    text = prose(session.record, session.outcome, session.findings, version=__version__, today=date.today())
+    QGuiApplication.clipboard().setText(text)
+    return True
+
+
+def copy_table(session: Session) -> bool:
+    """Put the findings on the clipboard as a table for a spreadsheet or a letter; False while there are none."""
+    from fourcount.publish.sheet import html, tsv
+
+    if session.findings is None or not _whole(session):
+        return False
+    data = QMimeData()
+    data.setText(tsv(session.outcome, session.findings, session.record.choices))
+    data.setHtml(html(session.outcome, session.findings, session.record.choices))
+    QGuiApplication.clipboard().setMimeData(data)
+    return True
+
+
+def copy_picture(session: Session, picture: Picture | None, style: Style) -> bool:
+    """Put the picture on the clipboard, with its sentences and cautions in it; False while there is none."""
+    from fourcount.ink.picture import as_image
+    from fourcount.wording.cautions import STANDING
+    from fourcount.wording.patient import picture_heading
+
+    if picture is None:
+        return False
+    heading = picture_heading(session.record, session.outcome)
+    foot = f"{STANDING} Fourcount {__version__}, {date.today():%Y-%m-%d}"
+    QGuiApplication.clipboard().setImage(as_image(picture, style, heading, foot))
+    return True
+
+
+def _whole(session: Session) -> bool:
+    from fourcount.appraisal.findings import Counts
+
+    return session.findings is not None and isinstance(session.findings.counts, Counts)
