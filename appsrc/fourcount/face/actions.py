@@ -37,6 +37,7 @@ COMMANDS = (
     Command("form", "table", "Ctrl+Shift+F", parts_from_last=True),
     Command("layout", "table", "Ctrl+Shift+L"),
     Command("first-cell", "table", "Ctrl+1", parts_from_last=True),
+    Command("baseline", "table", "Ctrl+2"),
     Command("clear", "table", "Ctrl+Shift+Backspace"),
     Command("bigger", "view", Standard.ZoomIn),
     Command("smaller", "view", Standard.ZoomOut),

@@ -117,6 +117,7 @@ class MeasureRow(QWidget):
         if self._line:
             self._run(painter, self._line, self.width())
         if self.hasFocus():
+            painter.setBrush(Qt.BrushStyle.NoBrush)
             painter.setPen(QPen(self._look.colour("accent"), 1, Qt.PenStyle.DotLine))
             painter.drawRect(self.rect().adjusted(0, 2, -1, -2))
         painter.end()

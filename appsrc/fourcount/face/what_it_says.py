@@ -41,6 +41,7 @@ class WhatItSays(QWidget):
         super().__init__()
         self._look = look
         self._rows: dict[str, MeasureRow] = {}
+        self._order: Sequence[str] = ()
         self._open = ""
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self._show_more = False
@@ -127,6 +128,7 @@ class WhatItSays(QWidget):
                 axis = axis_words(line.kind, scale.high)
             row.show_line(line, scale, axis, line.key == self._open)
             row.show()
+        self._put_in_order([line.key for line in lines])
         self._show_working(shown)
 
     def _row(self, key: str) -> MeasureRow:
@@ -137,13 +139,18 @@ class WhatItSays(QWidget):
             row.toggled.connect(self._on_row_toggled)
             self._rows[key] = row
             self._measures.addWidget(row)
-            self._keep_tab_order()
         return self._rows[key]
 
-    def _keep_tab_order(self) -> None:
-        rows = list(self._rows.values())
+    def _put_in_order(self, keys: Sequence[str]) -> None:
+        """Bring the rows, and Tab through them, into the order of their lines."""
+        if keys == self._order:
+            return
+        self._order = keys
         before: QWidget = self.sentence
-        for row in rows:
+        for place, key in enumerate(keys):
+            row = self._rows[key]
+            self._measures.removeWidget(row)
+            self._measures.insertWidget(place, row)
             QWidget.setTabOrder(before, row)
             before = row
         QWidget.setTabOrder(before, self.p_words)

@@ -142,7 +142,7 @@ class MainWindow(QMainWindow):
             "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
             "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
             "form": do.change_form, "layout": do.change_layout, "clear": do.clear_counts,
-            "first-cell": self._on_first_cell, "bigger": self._on_bigger, "smaller": self._on_smaller,
+            "first-cell": self._on_first_cell, "baseline": self._on_baseline, "bigger": self._on_bigger, "smaller": self._on_smaller,
             "actual": self._on_actual, "bars": self._on_bars, "more": self._on_more, "methods": self._on_methods,
             "keys": self._on_keys, "about": self._on_about,
         }  # fmt: skip
@@ -243,6 +243,12 @@ class MainWindow(QMainWindow):
         cell.setFocus(Qt.FocusReason.ShortcutFocusReason)
         cell.selectAll()
         self.page_scroll.ensureWidgetVisible(cell)
+
+    def _on_baseline(self) -> None:
+        field = self.patient.baseline
+        field.setFocus(Qt.FocusReason.ShortcutFocusReason)
+        field.selectAll()
+        self.page_scroll.ensureWidgetVisible(field)
 
     def _on_bigger(self) -> None:
         self.look.step_zoom(1)

@@ -95,6 +95,7 @@ COMMANDS = {
     "layout": "&Groups down or across",
     "clear": "C&lear the counts",
     "first-cell": "&Go to the first count",
+    "baseline": "Go to the starting &risk",
     "bigger": "&Larger text",
     "smaller": "S&maller text",
     "actual": "&Normal text size",
