@@ -13,8 +13,8 @@ from fourcount.ink.palette import Palette
 State = Literal["affected", "avoided", "added", "others"]
 STATES: tuple[State, ...] = ("affected", "avoided", "added", "others")
 
-PERSON_FROM = 7.0
-"""Below this width in device pixels a person cannot be told from a blot: squares and dots are drawn instead."""
+PERSON_FROM = 12.0
+"""Below this width in device pixels an outline runs together and reads as filled: squares and dots are drawn then."""
 
 
 @cache
@@ -37,9 +37,12 @@ def person() -> QPainterPath:
     return path
 
 
-def draw_icon(painter: QPainter, cell: QRectF, state: State, palette: Palette) -> None:
-    """Draw one person in ``cell``: filled when affected, hollow when not, with a mark of its own in between."""
-    if cell.width() < PERSON_FROM:
+def draw_icon(painter: QPainter, cell: QRectF, state: State, palette: Palette, stands_for: float | None = None) -> None:
+    """Draw one person in ``cell``: filled when affected, hollow when not, with a mark of its own in between.
+
+    In a key, ``stands_for`` is the width of the icons it explains, so that it shows the very shapes that they have.
+    """
+    if (stands_for or cell.width()) * painter.deviceTransform().m11() < PERSON_FROM:
         _draw_speck(painter, cell, state, palette)
         return
     painter.save()
@@ -56,7 +59,7 @@ def draw_icon(painter: QPainter, cell: QRectF, state: State, palette: Palette) -
         painter.strokePath(person(), _dashed(palette.outline, line))
         painter.strokePath(_stroke_through(), _round(palette.accent, line * 1.7))
     else:
-        painter.strokePath(person(), QPen(QColor(palette.accent), line * 1.2))
+        painter.strokePath(person(), QPen(QColor(palette.accent), line))
         painter.fillPath(_dot(), QColor(palette.accent))
     painter.restore()
 
@@ -73,7 +76,8 @@ def _draw_speck(painter: QPainter, cell: QRectF, state: State, palette: Palette)
     elif state == "others":
         painter.fillRect(box, QColor(palette.outline))
     elif state == "avoided":
-        painter.setPen(QPen(QColor(palette.accent), max(0.7, side * 0.16)))
+        width = max(0.7, side * 0.16)
+        painter.setPen(QPen(QColor(palette.accent), width, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))
         painter.drawLine(box.bottomLeft(), box.topRight())
     else:
         width = max(0.7, side * 0.2)

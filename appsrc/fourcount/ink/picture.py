@@ -11,11 +11,15 @@ from fourcount.ink.arrays import array_height, draw_array, draw_bar
 from fourcount.ink.people import State, draw_icon
 from fourcount.ink.style import OnPaper, Role, Style
 from fourcount.ink.typeset import draw_text, text_height, text_width
+from fourcount.picture.grid import GRIDS
 from fourcount.picture.plan import Array, Plan
 from fourcount.picture.scales import risk_scale
 
 SIDE_BY_SIDE_FROM = 280
 """Below this width (at 100% text) the two groups stand one under the other."""
+
+GAP = 28
+"""Room between two groups side by side, at 100% text."""
 
 
 class Side(NamedTuple):
@@ -74,14 +78,13 @@ class Picture:
 
     def _draw_sides(self, painter: QPainter | None, style: Style, x: float, y: float, width: float) -> float:
         pairs = ((self.words.without, self.plan.without), (self.words.with_, self.plan.with_))
-        gap = style.px(28)
-        tiny = self.plan.denominator == 10_000 and not self.bars
-        if width < style.px(SIDE_BY_SIDE_FROM) or tiny:
+        if self._stacked(style, width):
             top = y
             for side, array in pairs:
                 heights = self._caption_heights(style, side, width)
                 y += self._draw_side(painter, style, x, y, width, side, array, heights) + style.px(16)
             return y - top - style.px(16)
+        gap = style.px(GAP)
         each = (width - gap) / 2
         measured = [self._caption_heights(style, side, each) for side, _ in pairs]
         heights = (max(m[0] for m in measured), max(m[1] for m in measured))
@@ -89,6 +92,16 @@ class Picture:
             self._draw_side(painter, style, x + i * (each + gap), y, each, side, array, heights)
             for i, (side, array) in enumerate(pairs)
         )
+
+    def _stacked(self, style: Style, width: float) -> bool:
+        """Whether one group stands under the other: ten thousand icons need all the width there is."""
+        tiny = self.plan.denominator == 10_000 and not self.bars
+        return width < style.px(SIDE_BY_SIDE_FROM) or tiny
+
+    def _icon_width(self, style: Style, width: float) -> float:
+        """How wide one icon of the arrays is."""
+        each = width if self._stacked(style, width) else (width - style.px(GAP)) / 2
+        return each / GRIDS[self.plan.denominator or 100].width
 
     def _caption_heights(self, style: Style, side: Side, width: float) -> tuple[float, float]:
         """Heights of the title and of the count, so that both arrays can begin on one line."""
@@ -154,6 +167,7 @@ class Picture:
             return 0.0
         font, icon, top, left = style.font("small"), style.px(16), y, x
         line = max(float(icon), text_height("X", font, width))
+        stands_for = self._icon_width(style, width)
         for entry in self.words.key:
             wide = icon + style.px(6) + text_width(entry.text, font) + 2
             if x > left and x + wide > left + width:
@@ -161,7 +175,7 @@ class Picture:
             room = min(wide, width) - icon - style.px(6)
             tall = max(line, text_height(entry.text, font, room))
             if painter:
-                draw_icon(painter, QRectF(x, y, icon, icon), entry.state, style.palette)
+                draw_icon(painter, QRectF(x, y, icon, icon), entry.state, style.palette, stands_for)
                 draw_text(painter, x + icon + style.px(6), y, room, entry.text, font, style.palette.muted)
             if tall > line:
                 y += tall - line

@@ -6,6 +6,8 @@ from dataclasses import dataclass
 from math import floor
 
 DENOMINATORS = (100, 1_000, 10_000)
+NOISE = 1e-9
+"""In icons: more than the float error of a difference, less than any two counts can make."""
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
@@ -48,9 +50,9 @@ def shows_honestly(without: float, with_: float, denominator: int) -> bool:
     drawn = [half_up(risk * denominator) for risk in (without, with_)]
     true_difference = abs(with_ - without) * denominator
     drawn_difference = abs(drawn[1] - drawn[0])
-    apart = without == with_ or true_difference >= 1 - 1e-9
+    apart = without == with_ or true_difference >= 1 - NOISE
     slip = abs(drawn_difference - true_difference)
-    faithful = slip < 0.5 or slip < true_difference / 10
+    faithful = slip < 0.5 - NOISE or slip < true_difference / 10 - NOISE
     whole = all(
         (icons > 0 or risk == 0) and (icons < denominator or risk == 1)
         for icons, risk in zip(drawn, (without, with_), strict=True)
