@@ -176,6 +176,7 @@ def _open_window() -> int:
     if sys.platform.startswith("linux") and not _display_in(os.environ):
         print(f"fourcount: {NO_DISPLAY}", file=sys.stderr)
         return FAILED
+    import fourcount.face.running_start  # noqa: F401 - before Qt is loaded
     from fourcount.face.application import run
 
     return int(run())

@@ -19,6 +19,9 @@ if TYPE_CHECKING:
 SAID_BESIDE = ("baseline-uncertain",)
 """Cautions that the third column says in full beside the figure they concern."""
 
+BAR = 12
+"""The width kept for the scroll bar, whether it is there or not."""
+
 HIGHEST_SHARE = 0.26
 """The largest share of the window's height that the strip takes before it scrolls."""
 
@@ -119,7 +122,7 @@ class CautionsStrip(QScrollArea):
 
     def fit(self) -> None:
         """Take the height that the text needs, up to a share of the window's."""
-        needed = self._inside.heightForWidth(max(self.viewport().width(), 200)) + 1
+        needed = self._inside.heightForWidth(max(self.width() - BAR, 200)) + 1
         highest = max(int(self.window().height() * HIGHEST_SHARE), self._look.px(56))
         if self.height() != min(needed, highest):
             self.setFixedHeight(min(needed, highest))

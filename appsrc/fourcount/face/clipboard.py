@@ -43,8 +43,8 @@ def copy_table(session: Session) -> bool:
 def copy_picture(session: Session, picture: Picture | None, style: Style) -> bool:
     """Put the picture on the clipboard, with its sentences and cautions in it; False while there is none."""
     from fourcount.ink.picture import as_image
-    from fourcount.wording.cautions import STANDING
     from fourcount.wording.patient import picture_heading
+    from fourcount.wording.standing import STANDING
 
     if picture is None:
         return False

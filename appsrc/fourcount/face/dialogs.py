@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Sequence
 from typing import TYPE_CHECKING
 
-from PySide6.QtWidgets import QInputDialog, QLineEdit, QMessageBox, QWidget
+from PySide6.QtWidgets import QWidget
 
 from fourcount import __version__
 from fourcount.wording import labels
@@ -17,6 +17,8 @@ if TYPE_CHECKING:
 
 def may_discard(parent: QWidget) -> bool:
     """Ask whether what was typed may be lost."""
+    from PySide6.QtWidgets import QMessageBox
+
     box = QMessageBox(parent)
     box.setWindowTitle(labels.CLOSE_TITLE)
     box.setText(labels.CLOSE_QUESTION)
@@ -30,6 +32,8 @@ def may_discard(parent: QWidget) -> bool:
 
 def ask_level(parent: QWidget, now: str, problem: str = "") -> str | None:
     """Ask for a confidence level, with what was wrong with the last answer; None if nothing was chosen."""
+    from PySide6.QtWidgets import QInputDialog, QLineEdit
+
     question = f"{problem}\n{labels.LEVEL_QUESTION}".strip()
     text, accepted = QInputDialog.getText(parent, labels.LEVEL_TITLE, question, QLineEdit.EchoMode.Normal, now)
     return text if accepted else None
@@ -37,8 +41,8 @@ def ask_level(parent: QWidget, now: str, problem: str = "") -> str | None:
 
 def methods_window(look: Look, parent: QWidget) -> HelpWindow:
     """Every method with its formula and source, and what the program leaves out."""
-    from fourcount.wording.cautions import STANDING_FULL
     from fourcount.wording.help import limits_of_the_program, methods_and_sources
+    from fourcount.wording.standing import STANDING_FULL
 
     parts: list[Part] = []
     for heading, entries in methods_and_sources():
@@ -68,7 +72,7 @@ def about_window(look: Look, parent: QWidget) -> HelpWindow:
     from PySide6.QtCore import qVersion
 
     from fourcount.face.look import family_in_use
-    from fourcount.wording.cautions import STANDING_FULL
+    from fourcount.wording.standing import STANDING_FULL
 
     def of(name: str) -> str:
         try:

@@ -6,7 +6,7 @@ from collections.abc import Sequence
 
 from PySide6.QtCore import QEvent, QRect, QSize, Qt, Signal
 from PySide6.QtGui import QContextMenuEvent, QFocusEvent, QKeyEvent, QKeySequence, QPainter, QPaintEvent, QPen
-from PySide6.QtWidgets import QComboBox, QLineEdit, QSizePolicy, QStyle, QStyleOptionComboBox, QWidget
+from PySide6.QtWidgets import QComboBox, QLineEdit, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
@@ -201,12 +201,9 @@ class ChoiceField(QComboBox):
 
     def paintEvent(self, event: QPaintEvent) -> None:
         painter = QPainter(self)
-        option = QStyleOptionComboBox()
-        self.initStyleOption(option)
-        mouse_over = bool(option.state & QStyle.StateFlag.State_MouseOver)
         mark = self._look.px(16)
         text_area = self.rect().adjusted(0, 0, -mark, 0)
-        quiet = self._plain and not (mouse_over or self.hasFocus())
+        quiet = self._plain and not (self.underMouse() or self.hasFocus())
         painter.setFont(self.font())
         painter.setPen(QPen(self._look.colour("muted" if quiet else "ink")))
         words = self.fontMetrics().elidedText(

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from PySide6.QtCore import QRectF, QSize, Qt
 from PySide6.QtGui import QPainter, QPaintEvent
-from PySide6.QtWidgets import QScrollBar, QStyle, QStyleOptionSlider
+from PySide6.QtWidgets import QScrollBar
 
 from fourcount.face.look import Look
 
@@ -20,6 +20,8 @@ class ScrollBar(QScrollBar):
         return QSize(12, super().sizeHint().height())
 
     def paintEvent(self, event: QPaintEvent) -> None:
+        from PySide6.QtWidgets import QStyle, QStyleOptionSlider  # the first paint needs no bar
+
         option = QStyleOptionSlider()
         self.initStyleOption(option)
         slider = QStyle.SubControl.SC_ScrollBarSlider

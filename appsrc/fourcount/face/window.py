@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import gc
 from itertools import pairwise
 from typing import TYPE_CHECKING
 
@@ -25,7 +26,7 @@ from fourcount.face.what_it_says import WhatItSays
 from fourcount.record.outcome import CELLS, Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
-from fourcount.wording.cautions import STANDING
+from fourcount.wording.standing import STANDING
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
@@ -39,9 +40,11 @@ class MainWindow(QMainWindow):
 
     **Signals**
         first_painted: the first paint is over.
+        numbers_ready: the numerical libraries are loaded, so that no figure has to wait for them.
     """
 
     first_painted = Signal()
+    numbers_ready = Signal()
 
     def __init__(self, session: Session, look: Look, settings: Settings, later: Later) -> None:
         super().__init__()
@@ -142,8 +145,9 @@ class MainWindow(QMainWindow):
             "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
             "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
             "form": do.change_form, "layout": do.change_layout, "clear": do.clear_counts,
-            "first-cell": self._on_first_cell, "baseline": self._on_baseline, "bigger": self._on_bigger, "smaller": self._on_smaller,
-            "actual": self._on_actual, "bars": self._on_bars, "more": self._on_more, "methods": self._on_methods,
+            "first-cell": self._on_first_cell, "baseline": self._on_baseline, "bigger": self._on_bigger,
+            "smaller": self._on_smaller, "actual": self._on_actual, "bars": self._on_bars,
+            "more": self._on_more, "methods": self._on_methods,
             "keys": self._on_keys, "about": self._on_about,
         }  # fmt: skip
         for key, handler in handlers.items():
@@ -221,11 +225,13 @@ class MainWindow(QMainWindow):
     # Slots
 
     def _on_first_painted(self) -> None:
+        gc.enable()
         self.session.wake()
         self._later.load()
 
     def _on_libraries_loaded(self) -> None:
         self.session.announce()
+        self.numbers_ready.emit()
 
     def _on_figures_arrived(self, outcome: Outcome, choices: Choices, findings: OutcomeFindings) -> None:
         if choices == self.session.record.choices:

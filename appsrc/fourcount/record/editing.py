@@ -7,13 +7,10 @@ checked here. Text stays as typed, whatever its length; only what no file can ho
 from __future__ import annotations
 
 from collections.abc import Container
-from typing import TypeVar
+from typing import TYPE_CHECKING, TypeVar
 
 from msgspec.structs import fields, replace
 
-from fourcount.record.entry.digits import plain
-from fourcount.record.entry.readings import GroupCounts
-from fourcount.record.entry.table import read_table
 from fourcount.record.outcome import (
     CELLS,
     DESIGNS,
@@ -27,6 +24,9 @@ from fourcount.record.outcome import (
     Table,
 )
 from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family, Record
+
+if TYPE_CHECKING:
+    from fourcount.record.entry.readings import GroupCounts
 
 Word = TypeVar("Word", bound=str)
 
@@ -73,6 +73,8 @@ def in_form(outcome: Outcome, form: type[EventsAndOthers] | type[EventsOfTotal])
     """
     if type(outcome.table) is form:
         return outcome
+    from fourcount.record.entry.table import read_table  # the window starts without the readers
+
     reading = read_table(outcome.table)
     table = form(**{field: getattr(outcome.table, field) for field in CELLS})
     table = _converted(table, reading.first, "first_left_text", "first_right_text")
@@ -129,6 +131,8 @@ def with_level(record: Record, level: float) -> Record:
 def _converted(table: Table, counts: GroupCounts, left_field: str, right_field: str) -> Table:
     if counts.left is None or counts.right is None:
         return table
+    from fourcount.record.entry.digits import plain
+
     right = counts.total if isinstance(table, EventsOfTotal) else counts.right
     left_text = getattr(table, left_field)
     return replace(table, **{left_field: left_text if plain(left_text) else str(counts.left), right_field: str(right)})

@@ -11,9 +11,11 @@ import os
 import sys
 from pathlib import Path
 
-from first_paint import FirstPaint, report
+import fourcount.__main__
 
-import fourcount.__main__  # noqa: F401  what the command loads before the window
+import fourcount.face.running_start  # isort: skip  # noqa: F401
+from first_paint import FirstPaint, report  # isort: skip
+
 from fourcount.face.application import make_application, make_window
 from fourcount.record.outcome import EventsAndOthers, Outcome
 from fourcount.record.paper import Record
