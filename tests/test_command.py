@@ -8,7 +8,6 @@ import os
 import subprocess
 import sys
 from collections.abc import Mapping
-from typing import Any
 
 import pytest
 
