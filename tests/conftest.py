@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import os
 import socket
+import sys
 from pathlib import Path
 from typing import Any, NoReturn
 
@@ -38,6 +39,15 @@ def _own_folders(tmp_path: Path, monkeypatch: pytest.MonkeyPatch) -> None:
     monkeypatch.setenv("FOURCOUNT_SETTINGS_FOLDER", str(tmp_path / "settings"))
     for folder in ("CONFIG", "DATA", "STATE"):
         monkeypatch.setenv(f"XDG_{folder}_HOME", str(tmp_path / folder.lower()))
+
+
+@pytest.fixture(autouse=True, scope="session")
+def _clipboard_left_empty() -> Any:
+    """Leave nothing of Python's on the offscreen clipboard: Qt frees it after the interpreter is gone, and aborts."""
+    yield
+    gui = sys.modules.get("PySide6.QtGui")
+    if gui and gui.QGuiApplication.instance():
+        gui.QGuiApplication.clipboard().clear()
 
 
 @pytest.fixture(autouse=True, scope="session")

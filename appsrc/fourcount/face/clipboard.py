@@ -43,14 +43,16 @@ def copy_table(session: Session) -> bool:
 def copy_picture(session: Session, picture: Picture | None, style: Style) -> bool:
     """Put the picture on the clipboard, with its sentences and cautions in it; False while there is none."""
     from fourcount.ink.picture import as_image
+    from fourcount.wording.cautions import caution_text
     from fourcount.wording.patient import picture_heading
     from fourcount.wording.standing import STANDING
 
     if picture is None:
         return False
     heading = picture_heading(session.record, session.outcome)
-    foot = f"{STANDING} Fourcount {__version__}, {date.today():%Y-%m-%d}"
-    QGuiApplication.clipboard().setImage(as_image(picture, style, heading, foot))
+    cautions = [caution_text(caution) for caution in session.findings.cautions] if session.findings else []
+    foot = [*cautions, f"{STANDING} Fourcount {__version__}, {date.today():%Y-%m-%d}"]
+    QGuiApplication.clipboard().setImage(as_image(picture, style, heading, "\n".join(foot)))
     return True
 
 

@@ -60,8 +60,7 @@ def keys_window(look: Look, parent: QWidget, shortcuts: Sequence[tuple[str, str]
     """The keys of every command, as this platform writes them."""
     parts: list[Part] = [("body", labels.KEYS_INTRO)]
     for keys, words in (*labels.KEYS_MORE, *shortcuts):
-        parts.append(("strong", keys or labels.NO_KEYS))
-        parts.append(("body", words))
+        parts.append(("body", f"{keys or labels.NO_KEYS}\t{words}"))
     return _window(look, parent, labels.HELP_TITLES["keys"], parts)
 
 

@@ -9,6 +9,7 @@ from PySide6.QtGui import QTextBlockFormat, QTextCharFormat, QTextCursor
 from PySide6.QtWidgets import QDialog, QDialogButtonBox, QTextEdit, QVBoxLayout, QWidget
 
 from fourcount.face.look import Look
+from fourcount.face.scroll_bar import ScrollBar
 from fourcount.ink.style import Role
 
 Part = tuple[Role, str]
@@ -28,6 +29,7 @@ class HelpWindow(QDialog):
         self.text.setAcceptRichText(False)
         self.text.setAccessibleName(title)
         self.text.setFrameShape(QTextEdit.Shape.NoFrame)
+        self.text.setVerticalScrollBar(ScrollBar(look))
         flags = Qt.TextInteractionFlag
         self.text.setTextInteractionFlags(flags.TextSelectableByMouse | flags.TextSelectableByKeyboard)
         buttons = QDialogButtonBox(QDialogButtonBox.StandardButton.Close)
@@ -42,6 +44,7 @@ class HelpWindow(QDialog):
         """Show paragraphs; a "strong" one is a heading."""
         self._parts = tuple(parts)
         self.text.clear()
+        self.text.setTabStopDistance(self._look.px(230))
         cursor = self.text.textCursor()
         for i, (role, words) in enumerate(self._parts):
             self._add(cursor, role, words, first=i == 0)

@@ -11,7 +11,7 @@ from fourcount.record.outcome import Outcome
 from fourcount.wording import labels, numbers
 from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.names import sentence_case
-from fourcount.wording.patient import PatientWords, patient_words
+from fourcount.wording.patient import WHICH_PEOPLE, PatientWords, patient_words
 from fourcount.wording.patient import drawn as what_is_drawn
 
 
@@ -54,7 +54,7 @@ def _with_patient(
     words = patient_words(outcome, findings, drawn.denominator if drawn else None)
     missing = labels.MISSING.format(names=", ".join(words.missing)) if words.missing else ""
     range_words = f"{sentence_case(words.summary)}." if words.summary else ""
-    detail = " ".join(part for part in (range_words, words.detail) if part)
+    detail = " ".join(part for part in (range_words, words.detail, WHICH_PEOPLE) if part)
     lines = (words.summary_bold, detail)
     picture = Picture(drawn, _picture_words(words, lines), bars) if drawn else None
     return view._replace(
