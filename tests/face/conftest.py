@@ -1,0 +1,171 @@
+"""A window as a person finds it, hands to use it with, and eyes to read it."""
+
+from __future__ import annotations
+
+from collections.abc import Callable, Iterator
+from pathlib import Path
+
+import pytest
+from PySide6.QtCore import Qt
+from PySide6.QtGui import QGuiApplication, QKeySequence
+from PySide6.QtTest import QTest
+from PySide6.QtWidgets import QApplication, QComboBox, QWidget
+from pytestqt.qtbot import QtBot
+
+from fourcount.face import dialogs
+from fourcount.face.application import make_application, make_window
+from fourcount.face.measure_row import MeasureRow
+from fourcount.face.window import MainWindow
+from fourcount.record.outcome import CELLS
+from fourcount.record.paper import Record
+
+EXAMPLE_COUNTS = ("38", "374", "70", "339")
+
+
+class Hands:
+    """What a person does with keyboard and mouse, and what stands on screen afterwards."""
+
+    def __init__(self, qtbot: QtBot, window: MainWindow) -> None:
+        self.qtbot = qtbot
+        self.window = window
+
+    @property
+    def focus(self) -> QWidget:
+        """The widget that gets what is typed."""
+        return QApplication.focusWidget() or self.window
+
+    @property
+    def field(self) -> str:
+        """The key of the field that has the focus."""
+        return getattr(self.focus, "field", "")
+
+    def type(self, text: str) -> None:
+        """Type into whatever has the focus."""
+        QTest.keyClicks(self.focus, text)
+
+    def press(self, keys: str, times: int = 1) -> None:
+        """Press a key or a chord, written as in a menu."""
+        chord = QKeySequence(keys)[0]
+        for _ in range(times):
+            QTest.keyClick(self.focus, chord.key(), chord.keyboardModifiers())
+
+    def do(self, command: str) -> None:
+        """Give a command by its shortcut."""
+        self.press(self.window.actions_by_key[command].shortcut().toString())
+
+    def click(self, widget: QWidget) -> None:
+        """Click into the middle of a widget."""
+        QTest.mouseClick(widget, Qt.MouseButton.LeftButton)
+
+    def write(self, widget: QWidget, text: str) -> None:
+        """Go to a field and replace what it holds."""
+        self.click(widget)
+        self.press("Ctrl+A")
+        if text:
+            self.type(text)
+        else:
+            self.press("Del")
+
+    def count(self, *texts: str) -> None:
+        """Type counts from the first cell on, with Tab between them."""
+        self.do("first-cell")
+        for place, text in enumerate(texts):
+            if place:
+                self.press("Tab")
+            self.press("Ctrl+A")
+            if text:
+                self.type(text)
+            else:
+                self.press("Del")
+
+    def choose(self, box: QComboBox, text: str) -> None:
+        """Open a choice with the keyboard, go to an entry and take it."""
+        box.setFocus(Qt.FocusReason.TabFocusReason)
+        QTest.keyClick(box, Qt.Key.Key_F4)
+        self.qtbot.waitUntil(box.view().isVisible)
+        QTest.keyClick(box.view(), Qt.Key.Key_Home)
+        for _ in range(box.findText(text)):
+            QTest.keyClick(box.view(), Qt.Key.Key_Down)
+        assert box.view().currentIndex().data() == text
+        QTest.keyClick(box.view(), Qt.Key.Key_Return)
+        self.qtbot.waitUntil(lambda: not box.view().isVisible())
+
+    @property
+    def texts(self) -> tuple[str, ...]:
+        """What stands in the four cells."""
+        return tuple(self.window.printed.grid.cells[field].text() for field in CELLS)
+
+    @property
+    def sentence(self) -> str:
+        """The sentence above the measures."""
+        return self.window.says.sentence.text()
+
+    @property
+    def rows(self) -> dict[str, str]:
+        """The measures on screen: each row as a screen reader says it, by its key."""
+        rows = self.window.says.findChildren(MeasureRow)
+        return {row.key: row.accessibleName() for row in rows if row.isVisible()}
+
+    def row(self, key: str) -> MeasureRow:
+        """A measure's row on screen."""
+        return next(row for row in self.window.says.findChildren(MeasureRow) if row.key == key and row.isVisible())
+
+    @property
+    def notes(self) -> list[str]:
+        """The sentences about marked cells."""
+        words = self.window.printed.notes
+        return words.text().splitlines() if words.isVisible() else []
+
+
+@pytest.fixture(scope="session")
+def qapp() -> QApplication:
+    """The application that a start of the program makes."""
+    return make_application(["fourcount"])
+
+
+@pytest.fixture
+def folder(tmp_path: Path) -> Path:
+    """The folder of this test's settings and log."""
+    return tmp_path / "settings"
+
+
+@pytest.fixture
+def open_window(qtbot: QtBot, folder: Path, monkeypatch: pytest.MonkeyPatch) -> Iterator[Callable[..., MainWindow]]:
+    """Open a window and wait until it has painted; it is closed at the end without a question."""
+    monkeypatch.setattr(dialogs, "may_discard", lambda parent: True)
+
+    def make(record: Record | None = None) -> MainWindow:
+        window = make_window(folder, record)
+        qtbot.addWidget(window)
+        with qtbot.waitSignal(window.first_painted):
+            window.show()
+        qtbot.waitUntil(lambda: window.session.awake and window.isActiveWindow())
+        return window
+
+    yield make
+    QGuiApplication.styleHints().setColorScheme(Qt.ColorScheme.Unknown)
+
+
+@pytest.fixture
+def window(open_window: Callable[..., MainWindow]) -> MainWindow:
+    """The window of a first start."""
+    return open_window()
+
+
+@pytest.fixture
+def hands(qtbot: QtBot, window: MainWindow) -> Hands:
+    """Hands at the window of a first start."""
+    return Hands(qtbot, window)
+
+
+@pytest.fixture
+def at(qtbot: QtBot) -> Callable[[MainWindow], Hands]:
+    """Hands at another window."""
+    return lambda window: Hands(qtbot, window)
+
+
+@pytest.fixture
+def example(hands: Hands) -> Hands:
+    """Hands at a window with the four counts of the worked example typed, and nothing else."""
+    hands.count(*EXAMPLE_COUNTS)
+    return hands
