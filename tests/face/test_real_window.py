@@ -12,8 +12,8 @@ pytestmark = pytest.mark.real_window
 
 def test_a_table_is_answered_by_keyboard_alone(hands: Any) -> None:
     """Type a table, name the groups, go to case-control and back, change the family, set a baseline; undo and redo."""
+    empty = hands.window.session.record
     hands.count("38", "374", "70", "339")
-    empty = hands.window.session._past[0].record
     hands.do("first-cell")
     hands.press("Shift+Tab", 2)
     hands.press("Ctrl+A")
@@ -36,7 +36,8 @@ def test_a_table_is_answered_by_keyboard_alone(hands: Any) -> None:
     assert hands.window.patient.picture.picture.words.without.number == "12 in 100"
     full = hands.window.session.record
     hands.press("Ctrl+Z", 10)
-    assert hands.window.session.record.outcomes[0].table == empty.outcomes[0].table or hands.texts[1:] == ("", "", "")
+    assert hands.window.session.record == empty
+    assert hands.texts == ("", "", "", "")
     hands.press("Ctrl+Shift+Z", 10)
     assert hands.window.session.record == full
 
