@@ -131,8 +131,18 @@ def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) 
 @pytest.mark.parametrize(
     ("start", "keys", "end"),
     [
-        (0, "Down", 2), (2, "Up", 0), (0, "Right", 1), (1, "Left", 0), (1, "Down", 3), (0, "Return", 1),
-        (1, "Enter", 2), (2, "Return", 3), (3, "Return", 3), (0, "Up", 0), (2, "Down", 2), (1, "Right", 2),
+        (0, "Down", 2),
+        (2, "Up", 0),
+        (0, "Right", 1),
+        (1, "Left", 0),
+        (1, "Down", 3),
+        (0, "Return", 1),
+        (1, "Enter", 2),
+        (2, "Return", 3),
+        (3, "Return", 3),
+        (0, "Up", 0),
+        (2, "Down", 2),
+        (1, "Right", 2),
     ],  # fmt: skip
 )
 def test_arrows_and_enter_go_from_cell_to_cell(hands: Hands, start: int, keys: str, end: int) -> None:
