@@ -35,10 +35,10 @@ def test_a_table_is_answered_by_keyboard_alone(hands: Any) -> None:
     hands.type("12%")
     assert hands.window.patient.picture.picture.words.without.number == "12 in 100"
     full = hands.window.session.record
-    hands.press("Ctrl+Z", 10)
+    hands.press("Ctrl+Z", 11)
     assert hands.window.session.record == empty
     assert hands.texts == ("", "", "", "")
-    hands.press("Ctrl+Shift+Z", 10)
+    hands.press("Ctrl+Shift+Z", 11)
     assert hands.window.session.record == full
 
 

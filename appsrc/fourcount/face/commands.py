@@ -123,9 +123,10 @@ class Commands(QObject):
         """Ask until a level can be read or the question is put away."""
         from fourcount.record.entry.level import read_level
         from fourcount.record.entry.readings import Proportion, Unreadable
+        from fourcount.wording import numbers
         from fourcount.wording.gaps import mark_text
 
-        now, problem = f"{100 * self._session.record.choices.level:g}", ""
+        now, problem = numbers.level(self._session.record.choices.level), ""
         while (text := dialogs.ask_level(self._window, now, problem)) is not None:
             reading = read_level(text)
             if isinstance(reading, Proportion):

@@ -156,6 +156,8 @@ class MeasureRow(QWidget):
 
     def _name_room(self, line: MeasureLine, at: Places) -> float:
         """Width for the name and its detail: up to the estimate, where the row has one beside it."""
+        if not line.estimate and not line.withheld:
+            return at.strip + at.strip_width
         if at.narrow or line.withheld:
             return at.name
         return at.estimate_right - text_width(line.estimate, self._look.font("estimate")) - self._look.px(10)

@@ -7,8 +7,10 @@ from typing import NamedTuple
 from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
 from fourcount.ink.picture import KeyEntry, Picture, PictureWords, Side
 from fourcount.picture.plan import Plan, plan
+from fourcount.picture.scales import risk_scale
 from fourcount.record.outcome import Outcome
 from fourcount.wording import labels, numbers
+from fourcount.wording.axis import axis_words
 from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.names import sentence_case
 from fourcount.wording.patient import WHICH_PEOPLE, PatientWords, patient_words
@@ -56,7 +58,7 @@ def _with_patient(
     range_words = f"{sentence_case(words.summary)}." if words.summary else ""
     detail = " ".join(part for part in (range_words, words.detail, WHICH_PEOPLE) if part)
     lines = (words.summary_bold, detail)
-    picture = Picture(drawn, _picture_words(words, lines), bars) if drawn else None
+    picture = Picture(drawn, _picture_words(words, lines, drawn), bars) if drawn else None
     return view._replace(
         picture=picture,
         sentence=words.picture_sentence,
@@ -73,7 +75,8 @@ def _plan(outcome: Outcome, patient: PatientFindings) -> Plan | None:
     return plan(without, with_)
 
 
-def _picture_words(words: PatientWords, lines: tuple[str, ...]) -> PictureWords:
+def _picture_words(words: PatientWords, lines: tuple[str, ...], drawn: Plan) -> PictureWords:
+    low, _, high = axis_words("risk", risk_scale((drawn.without_risk, drawn.with_risk)).high)
     entries = (
         KeyEntry("affected", words.key_event),
         KeyEntry("avoided", words.key_avoided),
@@ -86,6 +89,7 @@ def _picture_words(words: PatientWords, lines: tuple[str, ...]) -> PictureWords:
         key=tuple(entry for entry in entries if entry.text),
         note=words.scale,
         lines=tuple(line for line in lines if line),
+        bar_ends=(low, high),
     )
 
 

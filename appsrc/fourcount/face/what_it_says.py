@@ -46,16 +46,18 @@ class WhatItSays(QWidget):
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self._show_more = False
         self.sentence = Words(look, "sentence", selectable=True)
-        self.p_words = Words(look, "body", "muted", selectable=True)
         self.working = Words(look, "small", selectable=True)
         self.working.setContentsMargins(12, 4, 0, 12)
         self.working.hide()
         self.family = ChoiceField(
             look, "Intervals", tuple(labels.FAMILIES.items()), prefix=labels.INTERVALS_PREFIX, plain=True
         )
-        levels = [(f"{level:g}", f"{100 * level:g}%") for level in labels.LEVELS]
         self.level = ChoiceField(
-            look, "Confidence level", (*levels, ("other", labels.OTHER_LEVEL)), prefix=labels.LEVEL_PREFIX, plain=True
+            look,
+            "Confidence level",
+            (*labels.LEVELS.items(), ("other", labels.OTHER_LEVEL)),
+            prefix=labels.LEVEL_PREFIX,
+            plain=True,
         )
         self.more = Link(look, labels.LINKS["more"], actions["more"])
         self.help = Link(look, labels.LINKS["help"], actions["methods"])
@@ -69,13 +71,10 @@ class WhatItSays(QWidget):
         if findings is None:
             self._shown = None
             return
-        from fourcount.appraisal.findings import Gap
-        from fourcount.wording.sentence import headline, p_sentence
+        from fourcount.wording.sentence import headline
 
         self._shown = (outcome, findings, record.choices)
         self.sentence.show_words(headline(outcome, findings, record.choices))
-        untyped = isinstance(findings.counts, Gap)
-        self.p_words.show_words("" if untyped else p_sentence(findings))
         self._show_rows()
 
     def set_more(self, more: bool) -> None:
@@ -93,9 +92,11 @@ class WhatItSays(QWidget):
 
     def _show_choices(self, choices: Choices) -> None:
         self.family.show_choice(choices.family)
-        key = f"{choices.level:g}"
+        key = repr(choices.level)
         if self.level.findData(key) < 0:
-            self.level.insertItem(self.level.count() - 1, f"{100 * choices.level:g}%", key)
+            from fourcount.wording import numbers
+
+            self.level.insertItem(self.level.count() - 1, numbers.level(choices.level), key)
         self.level.show_choice(key)
 
     def _show_rows(self) -> None:
@@ -103,11 +104,15 @@ class WhatItSays(QWidget):
             return
         from fourcount.appraisal.findings import Gap
         from fourcount.wording.lines import measure_lines, told_once
+        from fourcount.wording.sentence import p_line
 
         outcome, findings, choices = self._shown
         untyped = isinstance(findings.counts, Gap)
-        lines = () if untyped else measure_lines(outcome, findings, choices)
-        lines = told_once(tuple(line for line in lines if self._show_more or line.group == "main"))
+        lines: tuple[MeasureLine, ...] = ()
+        if not untyped:
+            every = measure_lines(outcome, findings, choices)
+            shown = tuple(line for line in every if self._show_more or line.group == "main")
+            lines = (*told_once(shown), p_line(findings))
         self._show_lines(lines)
         for widget in (self.more, *self.copies):
             widget.setVisible(not untyped)
@@ -153,7 +158,7 @@ class WhatItSays(QWidget):
             self._measures.insertWidget(place, row)
             QWidget.setTabOrder(before, row)
             before = row
-        QWidget.setTabOrder(before, self.p_words)
+        QWidget.setTabOrder(before, self.family)
 
     def _show_working(self, shown: set[str]) -> None:
         """Put the working under its row; it is computed only while it is open."""
@@ -186,11 +191,9 @@ class WhatItSays(QWidget):
         self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["says"].upper(), wraps=False))
         self._column.addWidget(self.sentence)
         self._column.addLayout(self._measures)
-        self._column.addWidget(self.p_words)
         self._column.addLayout(choosers)
         self._column.addLayout(copies)
         self._column.addStretch(1)
-        self.p_words.hide()
         for widget in (self.more, *self.copies):
             widget.hide()
         self._on_look_changed()

@@ -110,7 +110,7 @@ class MainWindow(QMainWindow):
             self.header.title, self.header.source, printed.design, printed.event_words, printed.welcome, printed.span,
             printed.form, printed.layout_choice, grid.headings["left"], grid.headings["right"], grid.labels["first"],
             grid.labels["second"], *grid.cells.values(), *printed.links, printed.example, says.sentence,
-            says.p_words, says.more, says.family, says.level, says.help, *says.copies, patient.baseline,
+            says.family, says.level, says.more, says.help, *says.copies, patient.baseline,
             patient.source, patient.effect, patient.summary, patient.detail, patient.copy,
             self.cautions,
         ]  # fmt: skip
@@ -291,3 +291,10 @@ class MainWindow(QMainWindow):
         for menu in self.menus.values():
             menu.setFont(self.look.font("body"))
         self.update()
+        QTimer.singleShot(0, self._show_focus)
+
+    def _show_focus(self) -> None:
+        """Bring what has the focus into view after everything has found its new place."""
+        focus = self.focusWidget()
+        if focus and self.page.isAncestorOf(focus):
+            self.page_scroll.ensureWidgetVisible(focus)

@@ -10,7 +10,7 @@ from PySide6.QtGui import QImage, QPainter
 from fourcount.ink.arrays import array_height, draw_array, draw_bar
 from fourcount.ink.people import State, draw_icon
 from fourcount.ink.style import OnPaper, Role, Style
-from fourcount.ink.typeset import draw_text, text_height, text_width
+from fourcount.ink.typeset import RIGHT, draw_text, text_height, text_width
 from fourcount.picture.grid import GRIDS
 from fourcount.picture.plan import Array, Plan
 from fourcount.picture.scales import risk_scale
@@ -39,13 +39,17 @@ class KeyEntry(NamedTuple):
 
 
 class PictureWords(NamedTuple):
-    """All words of a picture. ``note`` says a denominator other than 100, or that the risks are too small to draw."""
+    """All words of a picture. ``note`` says a denominator other than 100, or that the risks are too small to draw.
+
+    ``bar_ends`` are the ends of the scale on which the bars are drawn.
+    """
 
     without: Side
     with_: Side
     key: tuple[KeyEntry, ...]
     note: str
     lines: tuple[str, ...]
+    bar_ends: tuple[str, str] = ("", "")
 
 
 class Picture:
@@ -137,7 +141,8 @@ class Picture:
             if painter:
                 scale = risk_scale((self.plan.without_risk, self.plan.with_risk))
                 draw_bar(painter, QRectF(x, y, width, bar), risk, scale.high, palette)
-            y += bar
+            y += bar + style.px(2)
+            y += self._draw_bar_ends(painter, style, x, y, width)
         else:
             denominator = self.plan.denominator or 100
             tall = array_height(denominator, width)
@@ -147,6 +152,14 @@ class Picture:
         y += style.px(6)
         y += self._text(painter, style, x, y, width, side.other, "body", palette.muted)
         return y - top
+
+    def _draw_bar_ends(self, painter: QPainter | None, style: Style, x: float, y: float, width: float) -> float:
+        """Name both ends of a bar's scale, so that no bar is taken for the whole."""
+        font, colour = style.font("small"), style.palette.muted
+        if painter:
+            draw_text(painter, x, y, width, self.words.bar_ends[0], font, colour)
+            draw_text(painter, x, y, width, self.words.bar_ends[1], font, colour, RIGHT)
+        return text_height(self.words.bar_ends[1], font, width)
 
     def _draw_count(self, painter: QPainter | None, style: Style, x: float, y: float, width: float, side: Side) -> None:
         """The count in large figures, the percentage after it on the same base line where both fit."""

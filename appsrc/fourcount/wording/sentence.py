@@ -71,6 +71,11 @@ def p_sentence(findings: OutcomeFindings) -> str:
     )
 
 
+def p_line(findings: OutcomeFindings) -> lines.MeasureLine:
+    """The p of the family's own test as a line of its own: one sentence, without figures beside it."""
+    return lines.MeasureLine(key="test", name=p_sentence(findings))
+
+
 def _odds_headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     figure = findings.measures["odds_ratio"]
     if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):

@@ -17,6 +17,8 @@ from fourcount.wording.sentence import measure_sentence, p_sentence
 
 Row = tuple[str, str]
 
+SPACE: Row = ("", "")
+OTHER_METHODS = "By other methods:"
 TEST = "test"
 TEST_TITLE = "p value"
 OTHER_TITLE = "Ratio of the other outcome"
@@ -41,7 +43,7 @@ CONVERSION_SOURCE = "OR/(1 − p + p × OR) at starting risk p (Zhang and Yu 199
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Working:
-    """How a figure came about, row by row: what the row is, and its text."""
+    """How a figure came about, row by row: what the row is, and its text; rows of nothing part the groups."""
 
     title: str
     sentence: str
@@ -62,10 +64,12 @@ def working(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: 
     rows = [("Estimate", formula_with_numbers(measure, counts))]
     if measure == "risk_difference":
         rows += _units(found)
-    rows += _interval_rows(measure, found, findings, choices)
+    rows += [SPACE, *_interval_rows(measure, found, findings, choices)]
     if measure == "odds_ratio":
         rows += [*_conversion_rows(findings.conversion, names.risk_name(outcome)), _conditional_row(counts)]
-    rows += _other_methods(measure, counts, findings, choices)
+    others = _other_methods(measure, counts, findings, choices)
+    if others:
+        rows += [SPACE, ("", OTHER_METHODS), *others]
     return Working(title=title, sentence=sentence, rows=tuple(rows))
 
 
