@@ -52,7 +52,7 @@ def test_a_case_control_study_withholds_risks_with_one_reason(example: Hands) ->
     """Only the odds ratio stands; difference, number needed, risks and their ratio are one line with one reason."""
     example.choose(example.window.printed.design, "case-control study")
     reason = "A case-control study sets how many cases and controls it takes"
-    assert list(example.rows)[0] == "odds_ratio"
+    assert next(iter(example.rows)) == "odds_ratio"
     withheld = [row for key, row in example.rows.items() if key != "odds_ratio"]
     assert len(withheld) == 1
     assert reason in withheld[0]

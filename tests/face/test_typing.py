@@ -143,7 +143,7 @@ def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) 
         (0, "Up", 0),
         (2, "Down", 2),
         (1, "Right", 2),
-    ],  # fmt: skip
+    ],
 )
 def test_arrows_and_enter_go_from_cell_to_cell(hands: Hands, start: int, keys: str, end: int) -> None:
     """In the grid an arrow leads to the neighbour it points to, and Enter goes on in reading order."""

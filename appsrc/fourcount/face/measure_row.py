@@ -73,8 +73,9 @@ class MeasureRow(QWidget):
         self._line, self._scale, self._axis, self._open = line, scale, axis, is_open
         self.updateGeometry()
         self.update()
-        values = line.withheld or f"{line.estimate}, {line.interval}"
-        self.setAccessibleName(f"{line.name.replace(chr(10), ', ')}: {values}")
+        values = line.withheld or ", ".join(part for part in (line.estimate, line.interval) if part)
+        name = line.name.replace("\n", ", ")
+        self.setAccessibleName(f"{name}: {values}" if values else name)
         self.setAccessibleDescription(" ".join(part for part in (line.detail, line.note) if part))
 
     def hasHeightForWidth(self) -> bool:
