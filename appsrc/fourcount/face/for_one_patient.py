@@ -110,7 +110,7 @@ class ForOnePatient(QWidget):
         self.effect.show_choice(outcome.patient.effect)
         self._shown = (outcome, findings) if findings else None
         if findings is None:
-            self.baseline.setPlaceholderText(labels.BASELINE_HINT_EMPTY)
+            self.baseline.setPlaceholderText("")
             return
         self._show_findings(outcome, findings)
 

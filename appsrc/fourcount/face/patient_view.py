@@ -99,7 +99,7 @@ def _baseline_hint(outcome: Outcome, findings: OutcomeFindings) -> str:
     risk = findings.measures["risk_reference"]
     if isinstance(risk, Figure) and not isinstance(risk.estimate, Gap):
         return labels.BASELINE_HINT.format(percent=numbers.percent(risk.estimate))
-    return labels.BASELINE_HINT_EMPTY
+    return ""
 
 
 def _effect_words(findings: OutcomeFindings) -> dict[str, str]:

@@ -172,7 +172,8 @@ class WhatItSays(QWidget):
         rows = "\n".join(f"{label}: {value}" if label else value for label, value in text.rows)
         self._measures.removeWidget(self.working)
         self._measures.insertWidget(self._measures.indexOf(self._rows[self._open]) + 1, self.working)
-        self.working.show_words(f"{text.sentence}\n\n{rows}")
+        said = self._open == "test"  # its row is the sentence already
+        self.working.show_words(rows if said else f"{text.sentence}\n\n{rows}")
 
     def _on_row_toggled(self, key: str) -> None:
         self._open = "" if self._open == key else key

@@ -70,7 +70,6 @@ CELL_NAMES = {
 FIRST_STEP = "New here? See an invented example"
 PATIENT_WAITS = "The picture appears once the four counts are there."
 BASELINE_HINT = "{percent}"
-BASELINE_HINT_EMPTY = "the study’s"
 BASELINE_HINT_NEEDED = "needed"
 
 LINKS = {"help": "Methods and sources", "more": "More measures", "less": "Fewer measures"}
