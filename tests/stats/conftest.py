@@ -9,6 +9,7 @@ import mpmath
 import pytest
 
 from fourcount.stats.results import Counts
+from tables import counts_of
 
 Statistic = Callable[[Any], Any]
 
@@ -18,7 +19,7 @@ def table() -> Callable[..., Counts]:
     """Four counts from a, b, c, d."""
 
     def four(a: int, b: int, c: int, d: int) -> Counts:
-        return Counts(index_events=a, index_non_events=b, reference_events=c, reference_non_events=d)
+        return counts_of((a, b, c, d))
 
     return four
 

@@ -14,7 +14,8 @@ from hypothesis import assume, given, settings
 from hypothesis import strategies as st
 
 from fourcount.stats.conditional import baptista_pike, baptista_pike_mid_p, conditional_exact, conditional_odds_ratio
-from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.results import Gap, Interval
+from tables import counts_of, given_interval
 
 Table = tuple[int, int, int, int]
 
@@ -24,16 +25,6 @@ SMALL = st.tuples(*[st.integers(0, 14)] * 4).filter(lambda t: t[0] + t[1] and t[
 ANY = st.tuples(*[st.one_of(st.integers(0, 12), st.integers(0, 300), st.integers(0, 10**6))] * 4).filter(
     lambda t: t[0] + t[1] and t[2] + t[3] and t[0] + t[2] and t[1] + t[3]
 )
-
-
-def counts(table: Table) -> Counts:
-    a, b, c, d = table
-    return Counts(index_events=a, index_non_events=b, reference_events=c, reference_non_events=d)
-
-
-def interval(found: Interval | Gap) -> Interval:
-    assert isinstance(found, Interval)
-    return found
 
 
 @lru_cache(maxsize=8)
@@ -83,15 +74,15 @@ def test_adrenaline_trial(method, low: float, high: float) -> None:
     tests of statsmodels 0.15 quote it; its digits here come from mpmath at 50 digits. The mid-P digits are this
     program's own, kept against change; the tests below verify what they mean.
     """
-    found = interval(method(counts((7, 27, 1, 33)), 0.95))
+    found = given_interval(method(counts_of((7, 27, 1, 33)), 0.95))
     assert (found.low, found.high) == pytest.approx((low, high), rel=1e-12)
 
 
 def test_a_jump_at_no_effect_is_exact() -> None:
     """Groups of one size can put a limit at an odds ratio of exactly 1, free of rounding, seen from each side."""
-    assert interval(baptista_pike(counts((7, 27, 1, 33)), 0.95)).low == 1.0
-    assert interval(baptista_pike(counts((1, 33, 7, 27)), 0.95)).high == 1.0
-    assert interval(baptista_pike(counts((7, 1, 27, 33)), 0.95)).low == 1.0
+    assert given_interval(baptista_pike(counts_of((7, 27, 1, 33)), 0.95)).low == 1.0
+    assert given_interval(baptista_pike(counts_of((1, 33, 7, 27)), 0.95)).high == 1.0
+    assert given_interval(baptista_pike(counts_of((7, 1, 27, 33)), 0.95)).low == 1.0
 
 
 @pytest.mark.parametrize(("method", "own"), METHODS)
@@ -99,7 +90,7 @@ def test_a_jump_at_no_effect_is_exact() -> None:
 @given(table=SMALL, level=st.sampled_from([0.8, 0.9, 0.95, 0.99, 0.999]))
 def test_limits_bound_what_is_not_rejected(method, own: float, table: Table, level: float) -> None:
     """At a limit the sum is 1 - level, or jumps across it; beyond the limit it never exceeds 1 - level."""
-    found = interval(method(counts(table), level))
+    found = given_interval(method(counts_of(table), level))
     for limit, way in ((found.low, -1), (found.high, 1)):
         if limit in (0.0, math.inf):
             assert min(table[0], table[3]) == 0 if way < 0 else min(table[1], table[2]) == 0
@@ -118,7 +109,7 @@ def test_every_table_of_small_groups(method, own: float) -> None:
     """All tables of 7 against 5 people: just beyond each limit the sum is too small, just within large enough."""
     for a, c in itertools.product(range(8), range(6)):
         table = (a, 7 - a, c, 5 - c)
-        found = interval(method(counts(table), 0.95))
+        found = given_interval(method(counts_of(table), 0.95))
         for limit, way in ((found.low, -1), (found.high, 1)):
             if 0 < limit < math.inf:
                 assert exact_sum(table, limit * (1 + way * 1e-9), own) <= 0.05
@@ -186,7 +177,7 @@ def long_sums(table: Table, limit: float, own: float, lowest: float) -> tuple[mp
 )
 def test_limits_of_large_tables(method, own: float, table: Table) -> None:
     """To a million a cell, at each limit the sum is 5% or a jump leads across it, in 50-digit arithmetic."""
-    found = interval(method(counts(table), 0.95))
+    found = given_interval(method(counts_of(table), 0.95))
     a, b, c, d = table
     for seen, limit in ((table, found.low), ((c, d, a, b), 1 / found.high)):
         with mp.workdps(50):
@@ -199,8 +190,8 @@ def test_limits_of_large_tables(method, own: float, table: Table) -> None:
 
 def test_large_tables_near_the_other_exact_interval() -> None:
     """With a thousand million a cell all exact intervals nearly agree: to a millionth of the odds ratio here."""
-    table = counts((1_000_010_000, 999_990_000, 1_000_000_000, 1_000_020_000))
-    exact, found = interval(conditional_exact(table, 0.95)), interval(baptista_pike_mid_p(table, 0.95))
+    table = counts_of((1_000_010_000, 999_990_000, 1_000_000_000, 1_000_020_000))
+    exact, found = given_interval(conditional_exact(table, 0.95)), given_interval(baptista_pike_mid_p(table, 0.95))
     assert (found.low, found.high) == pytest.approx((exact.low, exact.high), rel=1e-6)
 
 
@@ -209,8 +200,11 @@ def test_large_tables_near_the_other_exact_interval() -> None:
 @given(table=ANY, level=st.floats(0.8, 0.99))
 def test_ordered_around_the_estimate_and_wider_with_the_level(method, table: Table, level: float) -> None:
     """low <= conditional estimate <= high, and a higher level never gives a narrower interval."""
-    estimate = conditional_odds_ratio(counts(table))
-    inner, outer = interval(method(counts(table), level)), interval(method(counts(table), level + 0.009))
+    estimate = conditional_odds_ratio(counts_of(table))
+    inner, outer = (
+        given_interval(method(counts_of(table), level)),
+        given_interval(method(counts_of(table), level + 0.009)),
+    )
     assert isinstance(estimate, float)
     assert 0.0 <= outer.low <= inner.low * (1 + 1e-13)
     assert inner.low <= estimate <= inner.high
@@ -223,9 +217,9 @@ def test_ordered_around_the_estimate_and_wider_with_the_level(method, table: Tab
 def test_mirrored(method, table: Table, level: float) -> None:
     """Swapped groups, or swapped outcomes, turn the interval into its reciprocal."""
     a, b, c, d = table
-    found = interval(method(counts(table), level))
+    found = given_interval(method(counts_of(table), level))
     for other in ((c, d, a, b), (b, a, d, c)):
-        swapped = interval(method(counts(other), level))
+        swapped = given_interval(method(counts_of(other), level))
         assert swapped.low * found.high == pytest.approx(1, rel=1e-12) or (swapped.low, found.high) == (0, math.inf)
         assert swapped.high * found.low == pytest.approx(1, rel=1e-12) or (found.low, swapped.high) == (0, math.inf)
 
@@ -234,7 +228,10 @@ def test_mirrored(method, table: Table, level: float) -> None:
 @given(table=ANY, level=st.floats(0.8, 0.999))
 def test_mid_p_lies_within_the_plain_interval(table: Table, level: float) -> None:
     """Half of the observed table's probability less never makes the interval longer."""
-    plain, mid = interval(baptista_pike(counts(table), level)), interval(baptista_pike_mid_p(counts(table), level))
+    plain, mid = (
+        given_interval(baptista_pike(counts_of(table), level)),
+        given_interval(baptista_pike_mid_p(counts_of(table), level)),
+    )
     assert plain.low <= mid.low * (1 + 1e-13)
     assert mid.high <= plain.high * (1 + 1e-13)
 
@@ -244,8 +241,8 @@ def test_mid_p_lies_within_the_plain_interval(table: Table, level: float) -> Non
 def test_plain_interval_lies_within_the_one_of_equal_tails_in_total(table: Table, level: float) -> None:
     """The sum is at least the tail beyond the observed table: one-sided limits at 1 - level lie within."""
     assume(level >= 0.9)
-    plain = interval(baptista_pike(counts(table), level))
-    one_sided = interval(conditional_exact(counts(table), 2 * level - 1))
+    plain = given_interval(baptista_pike(counts_of(table), level))
+    one_sided = given_interval(conditional_exact(counts_of(table), 2 * level - 1))
     assert plain.low <= one_sided.low * (1 + 1e-12)
     assert one_sided.high <= plain.high * (1 + 1e-12)
 
@@ -253,8 +250,8 @@ def test_plain_interval_lies_within_the_one_of_equal_tails_in_total(table: Table
 def test_one_outcome_only_and_empty_groups() -> None:
     """With one possible table all odds ratios are in; without people in both groups the reason is told."""
     for method in (baptista_pike, baptista_pike_mid_p):
-        assert method(counts((0, 10, 0, 20)), 0.95) == Interval(low=0.0, high=math.inf)
-        assert method(counts((10, 0, 10**9, 0)), 0.95) == Interval(low=0.0, high=math.inf)
-        assert method(counts((0, 0, 0, 0)), 0.95) == Gap("empty-table")
-        assert method(counts((0, 0, 1, 2)), 0.95) == Gap("empty-index-group")
-        assert method(counts((1, 2, 0, 0)), 0.95) == Gap("empty-reference-group")
+        assert method(counts_of((0, 10, 0, 20)), 0.95) == Interval(low=0.0, high=math.inf)
+        assert method(counts_of((10, 0, 10**9, 0)), 0.95) == Interval(low=0.0, high=math.inf)
+        assert method(counts_of((0, 0, 0, 0)), 0.95) == Gap("empty-table")
+        assert method(counts_of((0, 0, 1, 2)), 0.95) == Gap("empty-index-group")
+        assert method(counts_of((1, 2, 0, 0)), 0.95) == Gap("empty-reference-group")

@@ -21,7 +21,8 @@ from fourcount.stats.conditional import (
     conditional_odds_ratio,
 )
 from fourcount.stats.hypergeometric import Window, product_sum, window
-from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.results import Gap, Interval
+from tables import counts_of, given_interval
 
 Table = tuple[int, int, int, int]
 Sums = tuple[mp.mpf, mp.mpf, mp.mpf]
@@ -50,16 +51,6 @@ EXTREME: tuple[Table, ...] = (
     (1010, 990, 1000, 1000),
     (12_000, 8_000, 900, 700),
 )
-
-
-def counts(table: Table) -> Counts:
-    a, b, c, d = table
-    return Counts(index_events=a, index_non_events=b, reference_events=c, reference_non_events=d)
-
-
-def interval(found: Interval | Gap) -> Interval:
-    assert isinstance(found, Interval)
-    return found
 
 
 def side(table: Table, psi: mp.mpf, away: int) -> Sums:
@@ -121,7 +112,7 @@ def limits(table: Table, found: Interval) -> Iterator[tuple[float, bool]]:
 )
 def test_exact_limits_are_the_known_ones(table: Table, level: float, low: float, high: float, tolerance: float) -> None:
     """Known exact limits are met."""
-    found = interval(conditional_exact(counts(table), level))
+    found = given_interval(conditional_exact(counts_of(table), level))
     assert found.low == pytest.approx(low, rel=tolerance)
     assert found.high == pytest.approx(high, rel=tolerance)
 
@@ -131,7 +122,7 @@ def test_mid_p_limits_are_the_printed_ones() -> None:
 
     Fagerland, Lydersen and Laake 2015, Stat Methods Med Res 24:224, as the tests of statsmodels 0.15 quote it.
     """
-    found = interval(conditional_mid_p(counts((7, 27, 1, 33)), 0.95))
+    found = given_interval(conditional_mid_p(counts_of((7, 27, 1, 33)), 0.95))
     assert found.low == pytest.approx(1.19, abs=0.005)
     assert found.high == pytest.approx(200, abs=0.5)
 
@@ -145,7 +136,7 @@ def test_mid_p_limits_are_the_printed_ones() -> None:
 )
 def test_mid_p_limits_are_those_of_long_arithmetic(table: Table, low: float, high: float) -> None:
     """The 95% mid-P limits are those computed with mpmath at 50 digits."""
-    found = interval(conditional_mid_p(counts(table), 0.95))
+    found = given_interval(conditional_mid_p(counts_of(table), 0.95))
     assert (found.low, found.high) == pytest.approx((low, high), rel=1e-12)
 
 
@@ -160,7 +151,7 @@ def test_mid_p_limits_are_those_of_long_arithmetic(table: Table, low: float, hig
 )
 def test_estimate_is_the_known_one(table: Table, estimate: float) -> None:
     """Known conditional estimates are met."""
-    assert conditional_odds_ratio(counts(table)) == pytest.approx(estimate, rel=1e-12)
+    assert conditional_odds_ratio(counts_of(table)) == pytest.approx(estimate, rel=1e-12)
 
 
 @pytest.mark.parametrize(("method", "own"), METHODS)
@@ -169,7 +160,7 @@ def test_tails_at_the_limits_of_small_tables(method, own: float, level: float) -
     """Put back into the distribution, each limit leaves (1 - level)/2 in its tail, in exact fractions."""
     for table in ((7, 27, 1, 33), (2, 15, 10, 3), (0, 9, 4, 5), (12, 0, 3, 9), (1, 1, 1, 1), (30, 2, 11, 25)):
         a, b, c, d = table
-        for limit, upper in limits(table, interval(method(counts(table), level))):
+        for limit, upper in limits(table, given_interval(method(counts_of(table), level))):
             psi = Fraction(limit)
             weights = {
                 k: math.comb(a + b, k) * math.comb(c + d, a + c - k) * psi**k
@@ -186,7 +177,7 @@ def test_limits_of_extreme_tables(method, own: float, table: Table) -> None:
     """Zeros, rare events and huge groups: limits to twelve digits against 50-digit arithmetic, without a warning."""
     with np.errstate(over="raise", invalid="raise", divide="raise"):
         for level in (0.95, 0.999):
-            for limit, upper in limits(table, interval(method(counts(table), level))):
+            for limit, upper in limits(table, given_interval(method(counts_of(table), level))):
                 assert abs(error_of_limit(table, limit, level, own, upper=upper)) < 1e-12
 
 
@@ -195,21 +186,21 @@ def test_limits_of_extreme_tables(method, own: float, table: Table) -> None:
 @given(table=SMALL.filter(lambda t: t[0] + t[1] and t[2] + t[3]), level=st.floats(0.8, 0.999))
 def test_limits_of_any_small_table(method, own: float, table: Table, level: float) -> None:
     """Limits to twelve digits against 50-digit arithmetic."""
-    for limit, upper in limits(table, interval(method(counts(table), level))):
+    for limit, upper in limits(table, given_interval(method(counts_of(table), level))):
         assert abs(error_of_limit(table, limit, level, own, upper=upper)) < 1e-12
 
 
 def test_limits_at_a_million_a_cell() -> None:
     """With a window of thousands of tables, the limits still have twelve digits."""
     table = (1_000_500, 999_500, 10**6, 10**6)
-    found = interval(conditional_exact(counts(table), 0.95))
+    found = given_interval(conditional_exact(counts_of(table), 0.95))
     assert abs(error_of_limit(table, found.low, 0.95, 1.0, upper=False)) < 1e-12
 
 
 @pytest.mark.parametrize("table", [t for t in EXTREME if min(t[0], t[3]) > 0 and min(t[1], t[2]) > 0])
 def test_estimate_expects_what_was_seen(table: Table) -> None:
     """At the estimate the expected index events are the observed ones, in 50-digit arithmetic."""
-    found = conditional_odds_ratio(counts(table))
+    found = conditional_odds_ratio(counts_of(table))
     with mp.workdps(50):
         above, below = side(table, mp.mpf(found), 1), side(table, mp.mpf(found), -1)
         total = 1 + above[0] + below[0]
@@ -220,19 +211,19 @@ def test_estimate_expects_what_was_seen(table: Table) -> None:
 
 def test_estimate_at_the_ends_of_the_support() -> None:
     """0 and infinite where the table is the most extreme that its margins allow."""
-    assert conditional_odds_ratio(counts((0, 10, 4, 6))) == 0.0
-    assert conditional_odds_ratio(counts((4, 6, 0, 10))) == math.inf
-    assert conditional_odds_ratio(counts((10, 0, 4, 6))) == math.inf
-    assert conditional_odds_ratio(counts((4, 6, 10, 0))) == 0.0
+    assert conditional_odds_ratio(counts_of((0, 10, 4, 6))) == 0.0
+    assert conditional_odds_ratio(counts_of((4, 6, 0, 10))) == math.inf
+    assert conditional_odds_ratio(counts_of((10, 0, 4, 6))) == math.inf
+    assert conditional_odds_ratio(counts_of((4, 6, 10, 0))) == 0.0
 
 
 def test_one_outcome_only() -> None:
     """With one possible table the odds ratio is not determined: the intervals run from 0 to infinity."""
     for table in ((0, 10, 0, 20), (10, 0, 20, 0), (0, 10**9, 0, 10**9)):
         for method in (conditional_exact, conditional_mid_p):
-            assert method(counts(table), 0.95) == Interval(low=0.0, high=math.inf)
-    assert conditional_odds_ratio(counts((0, 10, 0, 20))) == Gap("no-events")
-    assert conditional_odds_ratio(counts((10, 0, 20, 0))) == Gap("no-non-events")
+            assert method(counts_of(table), 0.95) == Interval(low=0.0, high=math.inf)
+    assert conditional_odds_ratio(counts_of((0, 10, 0, 20))) == Gap("no-events")
+    assert conditional_odds_ratio(counts_of((10, 0, 20, 0))) == Gap("no-non-events")
 
 
 @pytest.mark.parametrize(
@@ -242,9 +233,9 @@ def test_one_outcome_only() -> None:
 def test_empty_groups_are_gaps(table: Table, key: str) -> None:
     """Without people in both groups nothing is computed, and the reason is told."""
     found = (
-        conditional_exact(counts(table), 0.95),
-        conditional_mid_p(counts(table), 0.95),
-        conditional_odds_ratio(counts(table)),
+        conditional_exact(counts_of(table), 0.95),
+        conditional_mid_p(counts_of(table), 0.95),
+        conditional_odds_ratio(counts_of(table)),
     )
     assert found == (Gap(key),) * 3
 
@@ -259,8 +250,8 @@ def test_agrees_with_scipy(table: Table, level: float) -> None:
     a, b, c, d = table
     theirs = scipy_odds_ratio(np.array([[a, b], [c, d]]))
     low, high = theirs.confidence_interval(level)
-    found = interval(conditional_exact(counts(table), level))
-    assert conditional_odds_ratio(counts(table)) == pytest.approx(theirs.statistic, rel=1e-8)
+    found = given_interval(conditional_exact(counts_of(table), level))
+    assert conditional_odds_ratio(counts_of(table)) == pytest.approx(theirs.statistic, rel=1e-8)
     assert (found.low, found.high) == pytest.approx((low, high), rel=1e-8)
 
 
@@ -271,8 +262,11 @@ def test_agrees_with_scipy(table: Table, level: float) -> None:
 )
 def test_ordered_around_the_estimate_and_wider_with_the_level(method, table: Table, level: float) -> None:
     """low <= estimate <= high, and a higher level never gives a narrower interval."""
-    estimate = conditional_odds_ratio(counts(table))
-    inner, outer = interval(method(counts(table), level)), interval(method(counts(table), level + 0.009))
+    estimate = conditional_odds_ratio(counts_of(table))
+    inner, outer = (
+        given_interval(method(counts_of(table), level)),
+        given_interval(method(counts_of(table), level + 0.009)),
+    )
     assert isinstance(estimate, float)
     assert 0.0 <= outer.low <= inner.low <= estimate <= inner.high <= outer.high
 
@@ -285,9 +279,12 @@ def test_ordered_around_the_estimate_and_wider_with_the_level(method, table: Tab
 def test_mirrored(method, table: Table, level: float) -> None:
     """Swapped groups, or swapped outcomes, turn the interval and the estimate into their reciprocals."""
     a, b, c, d = table
-    found, estimate = interval(method(counts(table), level)), conditional_odds_ratio(counts(table))
+    found, estimate = given_interval(method(counts_of(table), level)), conditional_odds_ratio(counts_of(table))
     for other in ((c, d, a, b), (b, a, d, c)):
-        swapped, its_estimate = interval(method(counts(other), level)), conditional_odds_ratio(counts(other))
+        swapped, its_estimate = (
+            given_interval(method(counts_of(other), level)),
+            conditional_odds_ratio(counts_of(other)),
+        )
         assert swapped.low * found.high == pytest.approx(1, rel=1e-12) or (swapped.low, found.high) == (0, math.inf)
         assert swapped.high * found.low == pytest.approx(1, rel=1e-12) or (found.low, swapped.high) == (0, math.inf)
         assert its_estimate * estimate == pytest.approx(1, rel=1e-12) or {estimate, its_estimate} == {0, math.inf}
@@ -297,14 +294,17 @@ def test_mirrored(method, table: Table, level: float) -> None:
 @given(table=ANY.filter(lambda t: t[0] + t[1] and t[2] + t[3]), level=st.floats(0.8, 0.999))
 def test_mid_p_lies_within_exact(table: Table, level: float) -> None:
     """Half of the observed table's probability taken off both tails, the interval is never longer."""
-    exact, mid = interval(conditional_exact(counts(table), level)), interval(conditional_mid_p(counts(table), level))
+    exact, mid = (
+        given_interval(conditional_exact(counts_of(table), level)),
+        given_interval(conditional_mid_p(counts_of(table), level)),
+    )
     assert exact.low <= mid.low
     assert mid.high <= exact.high
 
 
 def test_too_narrow_a_window_is_seen() -> None:
     """A window that leaves out part of what matters says that it does not hold it; the widened one does."""
-    near, far = window(counts((1010, 990, 1000, 1000))), window(counts((1010, 990, 1000, 1000)), 2)
+    near, far = window(counts_of((1010, 990, 1000, 1000))), window(counts_of((1010, 990, 1000, 1000)), 2)
     inside = slice(near.observed - 60, near.observed + 60)
     cut = Window(
         centre=near.centre,
@@ -323,13 +323,17 @@ def test_too_narrow_a_window_is_seen() -> None:
 
 def test_a_window_begun_too_narrow_is_widened(monkeypatch: pytest.MonkeyPatch) -> None:
     """However narrow the first window, the limits are the same; a support known to its ends is left alone."""
-    tables = [counts((1010, 990, 1000, 1000)), counts((400, 10**6, 300, 10**6)), counts((3, 10**6, 900, 10**6))]
+    tables = [
+        counts_of((1010, 990, 1000, 1000)),
+        counts_of((400, 10**6, 300, 10**6)),
+        counts_of((3, 10**6, 900, 10**6)),
+    ]
     methods = (conditional_exact, conditional_mid_p, baptista_pike_mid_p)
-    expected = [interval(method(table, 0.999)) for table in tables for method in methods]
+    expected = [given_interval(method(table, 0.999)) for table in tables for method in methods]
     for name, narrow in (("_REACH", 1.0), ("_MARGIN", 0.0), ("_FARTHEST_Z", 0.5)):
         monkeypatch.setattr(hypergeometric, name, narrow)
     window.cache_clear()
-    found = [interval(method(table, 0.999)) for table in tables for method in methods]
+    found = [given_interval(method(table, 0.999)) for table in tables for method in methods]
     window.cache_clear()
     for narrow_start, wide in zip(found, expected, strict=True):
         assert (narrow_start.low, narrow_start.high) == pytest.approx((wide.low, wide.high), rel=1e-13)

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import itertools
 from collections.abc import Callable
 from typing import Any
 
@@ -14,26 +13,14 @@ from hypothesis import strategies as st
 from fourcount.stats import difference
 from fourcount.stats.estimates import risk_difference
 from fourcount.stats.results import Counts, Gap, Interval
+from tables import CELLS, EXTREMES, LEVELS, assert_nested, given_interval
 
 Table = Callable[..., Counts]
 Method = Callable[[Counts, float], Interval | Gap]
 
-LEVELS = (0.8, 0.9, 0.95, 0.99, 0.999)
 SCORE = (difference.miettinen_nurminen, difference.mee)
 HYBRID = (difference.newcombe, difference.newcombe_continuity)
 METHODS = (*SCORE, *HYBRID, difference.agresti_caffo, difference.wald)
-EXTREMES = [
-    cells
-    for cells in itertools.product((0, 1, 3, 10**5, 10**9), repeat=4)
-    if cells[0] + cells[1] and cells[2] + cells[3]
-]
-CELL = st.integers(0, 60) | st.sampled_from([10**5, 10**9])
-CELLS = st.tuples(CELL, CELL, CELL, CELL).filter(lambda cells: cells[0] + cells[1] > 0 < cells[2] + cells[3])
-
-
-def _given(interval: Interval | Gap) -> Interval:
-    assert isinstance(interval, Interval), interval
-    return interval
 
 
 def _likeliest_reference_risk(cells: tuple[int, ...], d0: Any) -> Any:
@@ -76,7 +63,7 @@ def test_score_limits_put_back_into_the_cubic(
     """At each limit the published statistic is z: to 1e-12 of the limit or 1e-15 of the width, up to 10^9 a cell."""
     z = exact_z(level)
     for cells in EXTREMES:
-        interval = _given(method(table(*cells), level))
+        interval = given_interval(method(table(*cells), level))
         with mpmath.workdps(90):
             statistic = _statistic(cells, finite=method is difference.miettinen_nurminen)
         width = interval.high - interval.low
@@ -91,7 +78,10 @@ def test_score_limits_put_back_into_the_cubic(
 def test_a_difference_of_one_is_its_own_limit(method: Method, table: Table) -> None:
     """10/10 v 0/20: the upper limit is exactly 1; turned round, the lower one exactly -1."""
     for few, many in ((10, 20), (1, 1), (10**9, 3)):
-        upper, lower = _given(method(table(few, 0, 0, many), 0.95)), _given(method(table(0, many, few, 0), 0.95))
+        upper, lower = (
+            given_interval(method(table(few, 0, 0, many), 0.95)),
+            given_interval(method(table(0, many, few, 0), 0.95)),
+        )
         assert upper.high == 1
         assert lower.low == -1
         assert upper.low < 1
@@ -108,7 +98,7 @@ def test_newcombes_table(table: Table) -> None:
         (difference.newcombe_continuity, (9, 1, 3, 7)): (0.1013, 0.8387),
     }
     for (method, cells), limits in printed.items():
-        interval = _given(method(table(*cells), 0.95))
+        interval = given_interval(method(table(*cells), 0.95))
         assert (interval.low, interval.high) == pytest.approx(limits, abs=5e-5)
 
 
@@ -130,7 +120,7 @@ def test_square_and_add_keeps_every_digit(
     """Equal to Newcombe's printed formula in 50 digits, also where a distance is 1e-5 of its risk."""
     z = exact_z(level)
     for cells in EXTREMES:
-        interval = _given(HYBRID[which](table(*cells), level))
+        interval = given_interval(HYBRID[which](table(*cells), level))
         with mpmath.workdps(50):
             a, b, c, d = (mpmath.mpf(cell) for cell in cells)
             n1, n2 = a + b, c + d
@@ -162,13 +152,15 @@ def test_the_textbook_width_is_never_zero(table: Table) -> None:
     """Risks of 0 or 1 on both sides leave the bare formula without a width: a gap. One such side does not."""
     for cells in ((0, 10, 0, 10), (10, 0, 0, 20), (10, 0, 20, 0)):
         assert difference.wald(table(*cells), 0.95) == Gap("zero-width")
-    interval = _given(difference.wald(table(5, 51, 0, 29), 0.95))
+    interval = given_interval(difference.wald(table(5, 51, 0, 29), 0.95))
     assert (interval.low, interval.high) == pytest.approx((0.0146, 0.1640), abs=5e-5)  # Newcombe 1998, table II
 
 
 def test_agresti_caffo_is_given_beyond_one(table: Table) -> None:
     """10/10 v 0/20: the upper limit is 1.05, as the method has it."""
-    assert _given(difference.agresti_caffo(table(10, 0, 0, 20), 0.95)).high == pytest.approx(1.050181004541, rel=1e-12)
+    assert given_interval(difference.agresti_caffo(table(10, 0, 0, 20), 0.95)).high == pytest.approx(
+        1.050181004541, rel=1e-12
+    )
 
 
 @pytest.mark.parametrize("method", METHODS)
@@ -203,12 +195,7 @@ def test_intervals_hold_their_estimate(table: Table, cells: tuple[int, ...], lev
 def test_a_higher_level_is_never_narrower(table: Table, cells: tuple[int, ...]) -> None:
     """Each interval lies within the one of the next higher level."""
     for method in METHODS:
-        found = [method(table(*cells), level) for level in LEVELS]
-        for inner, outer in itertools.pairwise(found):
-            if isinstance(inner, Gap):
-                continue
-            assert _given(outer).low <= inner.low
-            assert inner.high <= _given(outer).high
+        assert_nested(method(table(*cells), level) for level in LEVELS)
 
 
 @settings(max_examples=80)
@@ -224,5 +211,5 @@ def test_swapped_groups_and_outcomes_mirror(table: Table, cells: tuple[int, ...]
                 assert other == one
                 continue
             close = 4e-15 * max(one.high - one.low, abs(one.low), abs(one.high))
-            assert one.low == pytest.approx(-_given(other).high, rel=0, abs=close)
-            assert one.high == pytest.approx(-_given(other).low, rel=0, abs=close)
+            assert one.low == pytest.approx(-given_interval(other).high, rel=0, abs=close)
+            assert one.high == pytest.approx(-given_interval(other).low, rel=0, abs=close)

@@ -14,7 +14,8 @@ from scipy.stats import fisher_exact
 
 from fourcount.stats.central import log_probability
 from fourcount.stats.conditional import fisher, fisher_greater, fisher_less, fisher_mid_p
-from fourcount.stats.results import Counts, Gap
+from fourcount.stats.results import Gap
+from tables import counts_of
 
 Table = tuple[int, int, int, int]
 
@@ -36,11 +37,6 @@ HUGE: tuple[Table, ...] = (
     (20, 10**9, 10**4, 10**9),
     (10**9, 7, 10**6, 2),
 )
-
-
-def counts(table: Table) -> Counts:
-    a, b, c, d = table
-    return Counts(index_events=a, index_non_events=b, reference_events=c, reference_non_events=d)
 
 
 def exact_probabilities(table: Table) -> dict[int, Fraction]:
@@ -92,18 +88,18 @@ def over_own(table: Table, away: int) -> mp.mpf:
 )
 def test_known_figures(test, table: Table, p: float, tolerance: float) -> None:
     """Printed figures and those of R are met to their digits."""
-    assert test(counts(table)) == pytest.approx(p, abs=tolerance)
+    assert test(counts_of(table)) == pytest.approx(p, abs=tolerance)
 
 
 def test_below_the_smallest_double() -> None:
     """1000/1000 against 0/1000: 9.8e-601 is 0 in doubles; a p among the smallest doubles is still given."""
-    table = counts((1000, 0, 0, 1000))
+    table = counts_of((1000, 0, 0, 1000))
     assert log_probability(table) == pytest.approx(math.log(9.7649020396977825 / 2) - 601 * math.log(10), rel=1e-14)
     assert [test(table) for test in TESTS] == [0.0, 0.0, 1.0, 0.0]
-    assert fisher(counts((515, 0, 0, 515))) == pytest.approx(
+    assert fisher(counts_of((515, 0, 0, 515))) == pytest.approx(
         float(exact_probabilities((515, 0, 0, 515))[515] * 2), rel=1e-9
     )
-    assert 0 < fisher(counts((535, 0, 0, 535))) < 1e-319
+    assert 0 < fisher(counts_of((535, 0, 0, 535))) < 1e-319
 
 
 @settings(max_examples=80)
@@ -114,12 +110,12 @@ def test_any_small_table(table: Table) -> None:
     a = table[0]
     own = probabilities[a]
     two_sided = sum(p for p in probabilities.values() if p <= own * (1 + Fraction(1, 10**7)))
-    assert fisher(counts(table)) == pytest.approx(float(two_sided), rel=1e-12)
-    assert fisher_mid_p(counts(table)) == pytest.approx(float(two_sided - own / 2), rel=1e-12)
-    assert fisher_less(counts(table)) == pytest.approx(
+    assert fisher(counts_of(table)) == pytest.approx(float(two_sided), rel=1e-12)
+    assert fisher_mid_p(counts_of(table)) == pytest.approx(float(two_sided - own / 2), rel=1e-12)
+    assert fisher_less(counts_of(table)) == pytest.approx(
         float(sum(p for k, p in probabilities.items() if k <= a)), rel=1e-12
     )
-    assert fisher_greater(counts(table)) == pytest.approx(
+    assert fisher_greater(counts_of(table)) == pytest.approx(
         float(sum(p for k, p in probabilities.items() if k >= a)), rel=1e-12
     )
 
@@ -127,9 +123,9 @@ def test_any_small_table(table: Table) -> None:
 def test_tied_tables_count_in_full_but_for_the_own_half() -> None:
     """9/12 against 3/12: the mirrored table is tied; p counts both, mid-P takes off half of one."""
     own = float(exact_probabilities((9, 3, 3, 9))[9])
-    greater = fisher_greater(counts((9, 3, 3, 9)))
-    assert fisher(counts((9, 3, 3, 9))) == pytest.approx(2 * greater, rel=1e-13)
-    assert fisher_mid_p(counts((9, 3, 3, 9))) == pytest.approx(2 * greater - own / 2, rel=1e-13)
+    greater = fisher_greater(counts_of((9, 3, 3, 9)))
+    assert fisher(counts_of((9, 3, 3, 9))) == pytest.approx(2 * greater, rel=1e-13)
+    assert fisher_mid_p(counts_of((9, 3, 3, 9))) == pytest.approx(2 * greater - own / 2, rel=1e-13)
 
 
 @pytest.mark.parametrize("table", HUGE)
@@ -142,8 +138,8 @@ def test_huge_tables(table: Table) -> None:
             far, near_test, far_test = own * over_own(table, 1), fisher_greater, fisher_less
         else:
             far, near_test, far_test = own * over_own(table, -1), fisher_less, fisher_greater
-        assert near_test(counts(table)) == pytest.approx(float(own + far), rel=1e-12)
-        assert far_test(counts(table)) == pytest.approx(float(1 - far), rel=1e-12)
+        assert near_test(counts_of(table)) == pytest.approx(float(own + far), rel=1e-12)
+        assert far_test(counts_of(table)) == pytest.approx(float(1 - far), rel=1e-12)
 
 
 @pytest.mark.parametrize(
@@ -152,13 +148,13 @@ def test_huge_tables(table: Table) -> None:
 def test_two_sided_at_the_largest_counts(table: Table) -> None:
     """The figures of 60-digit arithmetic over all tables, computed once with mpmath 1.4.1."""
     known = {10_010_000: 0.0398904268142314, 10**9 + 60_000: 0.057783741832558785}
-    assert fisher(counts(table)) == pytest.approx(known[table[0]], rel=1e-12)
+    assert fisher(counts_of(table)) == pytest.approx(known[table[0]], rel=1e-12)
 
 
 def test_nearly_tied_neighbours_at_the_largest_counts() -> None:
     """Near the likeliest table neighbours differ by less than the tie rule sees, and count."""
-    assert fisher(counts((10**9 + 3, 10**9, 10**9 + 7, 10**9))) == 1.0
-    assert fisher(counts((10**9 + 100, 10**9, 10**9 + 7, 10**9))) == pytest.approx(0.998889822063539, rel=1e-12)
+    assert fisher(counts_of((10**9 + 3, 10**9, 10**9 + 7, 10**9))) == 1.0
+    assert fisher(counts_of((10**9 + 100, 10**9, 10**9 + 7, 10**9))) == pytest.approx(0.998889822063539, rel=1e-12)
 
 
 @settings(max_examples=60)
@@ -167,9 +163,11 @@ def test_agrees_with_scipy(table: Table) -> None:
     """The two-sided and one-sided figures are those of scipy.stats.fisher_exact."""
     a, b, c, d = table
     matrix = [[a, b], [c, d]]
-    assert fisher(counts(table)) == pytest.approx(fisher_exact(matrix).pvalue, rel=1e-7, abs=1e-300)
-    assert fisher_less(counts(table)) == pytest.approx(fisher_exact(matrix, "less").pvalue, rel=1e-7, abs=1e-300)
-    assert fisher_greater(counts(table)) == pytest.approx(fisher_exact(matrix, "greater").pvalue, rel=1e-7, abs=1e-300)
+    assert fisher(counts_of(table)) == pytest.approx(fisher_exact(matrix).pvalue, rel=1e-7, abs=1e-300)
+    assert fisher_less(counts_of(table)) == pytest.approx(fisher_exact(matrix, "less").pvalue, rel=1e-7, abs=1e-300)
+    assert fisher_greater(counts_of(table)) == pytest.approx(
+        fisher_exact(matrix, "greater").pvalue, rel=1e-7, abs=1e-300
+    )
 
 
 @settings(max_examples=80)
@@ -177,19 +175,19 @@ def test_agrees_with_scipy(table: Table) -> None:
 def test_probabilities_and_mirrors(table: Table) -> None:
     """All figures lie from 0 to 1, mid-P below p; swapped groups or outcomes leave them, and swap the one-sided."""
     a, b, c, d = table
-    p, mid, less, greater = (test(counts(table)) for test in TESTS)
+    p, mid, less, greater = (test(counts_of(table)) for test in TESTS)
     assert 0 <= mid <= p <= 1
     assert 0 <= less <= 1
     assert 0 <= greater <= 1
     for other in ((c, d, a, b), (b, a, d, c)):
-        its_p, its_mid, its_less, its_greater = (test(counts(other)) for test in TESTS)
+        its_p, its_mid, its_less, its_greater = (test(counts_of(other)) for test in TESTS)
         assert (its_p, its_mid, its_greater, its_less) == pytest.approx((p, mid, less, greater), rel=1e-11, abs=1e-300)
 
 
 def test_one_outcome_only() -> None:
     """Where only one table is possible p is 1, and half of its own probability off leaves a mid-P of 1/2."""
     for table in ((0, 10, 0, 20), (10, 0, 20, 0), (0, 10**9, 0, 10**9)):
-        found = [test(counts(table)) for test in TESTS]
+        found = [test(counts_of(table)) for test in TESTS]
         assert found == pytest.approx([1.0, 0.5, 1.0, 1.0], rel=1e-13)
         assert max(found) <= 1.0
 
@@ -200,4 +198,4 @@ def test_one_outcome_only() -> None:
 )
 def test_empty_groups_are_gaps(table: Table, key: str) -> None:
     """Without people in both groups nothing is computed, and the reason is told."""
-    assert [test(counts(table)) for test in TESTS] == [Gap(key)] * 4
+    assert [test(counts_of(table)) for test in TESTS] == [Gap(key)] * 4

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import itertools
 import math
 from collections.abc import Callable
 from typing import Any
@@ -15,25 +14,13 @@ from hypothesis import strategies as st
 from fourcount.stats import odds
 from fourcount.stats.estimates import odds_ratio
 from fourcount.stats.results import Counts, Gap, Interval
+from tables import CELLS, EXTREMES, LEVELS, assert_nested, given_interval
 
 Table = Callable[..., Counts]
 Method = Callable[[Counts, float], Interval | Gap]
 
-LEVELS = (0.8, 0.9, 0.95, 0.99, 0.999)
 SCORE = (odds.miettinen_nurminen, odds.cornfield)
 METHODS = (*SCORE, odds.woolf, odds.gart)
-EXTREMES = [
-    cells
-    for cells in itertools.product((0, 1, 3, 10**5, 10**9), repeat=4)
-    if cells[0] + cells[1] and cells[2] + cells[3]
-]
-CELL = st.integers(0, 60) | st.sampled_from([10**5, 10**9])
-CELLS = st.tuples(CELL, CELL, CELL, CELL).filter(lambda cells: cells[0] + cells[1] > 0 < cells[2] + cells[3])
-
-
-def _given(interval: Interval | Gap) -> Interval:
-    assert isinstance(interval, Interval), interval
-    return interval
 
 
 def _statistic(cells: tuple[int, ...], *, finite: bool) -> Callable[[Any], Any]:
@@ -64,7 +51,7 @@ def test_score_limits_put_back_into_the_statistic(
     """At each limit the published statistic is z, to 1e-14 of the limit, from single events to 10^9 a cell."""
     z = exact_z(level)
     for cells in EXTREMES:
-        interval = _given(method(table(*cells), level))
+        interval = given_interval(method(table(*cells), level))
         with mpmath.workdps(90):
             statistic = _statistic(cells, finite=method is odds.miettinen_nurminen)
         for limit, target in ((interval.low, z), (interval.high, -z)):
@@ -75,7 +62,7 @@ def test_score_limits_put_back_into_the_statistic(
 def test_adrenaline_in_cardiac_arrest(table: Table) -> None:
     """7/34 v 1/34 (Fagerland and others 2015): Woolf 0.99 to 74, Gart 0.98 to 38."""
     counts = table(7, 27, 1, 33)
-    plain, adjusted = _given(odds.woolf(counts, 0.95)), _given(odds.gart(counts, 0.95))
+    plain, adjusted = given_interval(odds.woolf(counts, 0.95)), given_interval(odds.gart(counts, 0.95))
     assert plain.low == pytest.approx(0.99, abs=0.005)
     assert plain.high == pytest.approx(74, abs=0.5)
     assert adjusted.low == pytest.approx(0.98, abs=0.005)
@@ -86,15 +73,15 @@ def test_adrenaline_in_cardiac_arrest(table: Table) -> None:
 def test_score_limits_at_counts_of_zero(method: Method, table: Table) -> None:
     """a or d at 0: from 0. b or c at 0: to infinity. A whole column at 0: everything."""
     for cells in ((0, 10, 3, 7), (3, 7, 10, 0)):
-        interval = _given(method(table(*cells), 0.95))
+        interval = given_interval(method(table(*cells), 0.95))
         assert interval.low == 0
         assert 0 < interval.high < math.inf
     for cells in ((10, 0, 3, 7), (3, 7, 0, 10), (10, 0, 0, 10)):
-        interval = _given(method(table(*cells), 0.95))
+        interval = given_interval(method(table(*cells), 0.95))
         assert 0 < interval.low < math.inf
         assert interval.high == math.inf
     for cells in ((0, 10, 0, 20), (10, 0, 20, 0)):
-        assert _given(method(table(*cells), 0.95)) == Interval(low=0.0, high=math.inf)
+        assert given_interval(method(table(*cells), 0.95)) == Interval(low=0.0, high=math.inf)
 
 
 @pytest.mark.parametrize("level", [0.8, 0.95, 0.999])
@@ -105,7 +92,7 @@ def test_logit_intervals_keep_every_digit(level: float, table: Table, exact_z: C
         for method, added in ((odds.woolf, 0.0), (odds.gart, 0.5)):
             if method is odds.woolf and 0 in cells:
                 continue
-            interval = _given(method(table(*cells), level))
+            interval = given_interval(method(table(*cells), level))
             with mpmath.workdps(50):
                 a, b, c, d = (mpmath.mpf(cell) + added for cell in cells)
                 spread = z * mpmath.sqrt(1 / a + 1 / b + 1 / c + 1 / d)
@@ -117,10 +104,10 @@ def test_logit_intervals_keep_every_digit(level: float, table: Table, exact_z: C
 def test_woolf_at_a_count_of_zero_is_garts_and_says_so(table: Table) -> None:
     """A zero cell takes 1/2 in all four, named in the interval; without one nothing is added."""
     for cells in ((0, 10, 3, 7), (3, 7, 10, 0), (0, 10, 0, 20), (10, 0, 0, 20)):
-        interval = _given(odds.woolf(table(*cells), 0.95))
+        interval = given_interval(odds.woolf(table(*cells), 0.95))
         assert interval == odds.gart(table(*cells), 0.95)
         assert interval.adjusted == "half"
-    assert _given(odds.woolf(table(3, 7, 5, 5), 0.95)).adjusted is None
+    assert given_interval(odds.woolf(table(3, 7, 5, 5), 0.95)).adjusted is None
 
 
 @pytest.mark.parametrize("method", METHODS)
@@ -138,7 +125,7 @@ def test_intervals_hold_their_estimate(table: Table, cells: tuple[int, ...], lev
     counts = table(*cells)
     estimate = odds_ratio(counts)
     for method in METHODS:
-        interval = _given(method(counts, level))
+        interval = given_interval(method(counts, level))
         assert 0 <= interval.low < interval.high
         if interval.adjusted is None and not isinstance(estimate, Gap):
             assert interval.low <= estimate <= interval.high
@@ -149,10 +136,7 @@ def test_intervals_hold_their_estimate(table: Table, cells: tuple[int, ...], lev
 def test_a_higher_level_is_never_narrower(table: Table, cells: tuple[int, ...]) -> None:
     """Each interval lies within the one of the next higher level."""
     for method in METHODS:
-        found = [_given(method(table(*cells), level)) for level in LEVELS]
-        for inner, outer in itertools.pairwise(found):
-            assert outer.low <= inner.low
-            assert inner.high <= outer.high
+        assert_nested(given_interval(method(table(*cells), level)) for level in LEVELS)
 
 
 @settings(max_examples=80)
@@ -161,8 +145,8 @@ def test_swapped_groups_and_outcomes_give_the_reciprocal(table: Table, cells: tu
     """Either swap turns the odds ratio upside down, and its limits with it."""
     a, b, c, d = cells
     for method in METHODS:
-        one = _given(method(table(a, b, c, d), level))
+        one = given_interval(method(table(a, b, c, d), level))
         for swapped in (table(c, d, a, b), table(b, a, d, c)):
-            other = _given(method(swapped, level))
+            other = given_interval(method(swapped, level))
             for limit, turned in ((one.low, other.high), (one.high, other.low)):
                 assert limit == pytest.approx(1 / turned if turned else math.inf, rel=1e-14)

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import itertools
 import math
 from collections.abc import Callable
 from typing import Any
@@ -15,25 +14,13 @@ from hypothesis import strategies as st
 from fourcount.stats import ratio
 from fourcount.stats.estimates import risk_ratio
 from fourcount.stats.results import Counts, Gap, Interval
+from tables import CELLS, EXTREMES, LEVELS, assert_nested, given_interval
 
 Table = Callable[..., Counts]
 Method = Callable[[Counts, float], Interval | Gap]
 
-LEVELS = (0.8, 0.9, 0.95, 0.99, 0.999)
 SCORE = (ratio.koopman, ratio.miettinen_nurminen)
 METHODS = (*SCORE, ratio.katz, ratio.walter)
-EXTREMES = [
-    cells
-    for cells in itertools.product((0, 1, 3, 10**5, 10**9), repeat=4)
-    if cells[0] + cells[1] and cells[2] + cells[3]
-]
-CELL = st.integers(0, 60) | st.sampled_from([10**5, 10**9])
-CELLS = st.tuples(CELL, CELL, CELL, CELL).filter(lambda cells: cells[0] + cells[1] > 0 < cells[2] + cells[3])
-
-
-def _given(interval: Interval | Gap) -> Interval:
-    assert isinstance(interval, Interval), interval
-    return interval
 
 
 def _statistic(cells: tuple[int, ...], *, finite: bool) -> Callable[[Any], Any]:
@@ -64,7 +51,7 @@ def test_score_limits_put_back_into_the_statistic(
     """At each limit the published statistic is z, to 1e-14 of the limit, from single events to 10^9 a cell."""
     z = exact_z(level)
     for cells in EXTREMES:
-        interval = _given(method(table(*cells), level))
+        interval = given_interval(method(table(*cells), level))
         with mpmath.workdps(90):
             statistic = _statistic(cells, finite=method is ratio.miettinen_nurminen)
         for limit, target in ((interval.low, z), (interval.high, -z)):
@@ -74,25 +61,25 @@ def test_score_limits_put_back_into_the_statistic(
 
 def test_koopmans_example(table: Table) -> None:
     """36/40 v 16/80: 2.940 to 7.152 (Koopman 1984, as given by Nam 1995)."""
-    interval = _given(ratio.koopman(table(36, 4, 16, 64), 0.95))
+    interval = given_interval(ratio.koopman(table(36, 4, 16, 64), 0.95))
     assert (interval.low, interval.high) == pytest.approx((2.940, 7.152), abs=5e-4)
 
 
 @pytest.mark.parametrize("method", SCORE)
 def test_score_limits_without_events(method: Method, table: Table) -> None:
     """No index event: from 0. No reference event: to infinity. Neither: everything, and the estimate is a gap."""
-    few = _given(method(table(0, 10, 3, 7), 0.95))
+    few = given_interval(method(table(0, 10, 3, 7), 0.95))
     assert few.low == 0
     assert 0 < few.high < math.inf
-    many = _given(method(table(3, 7, 0, 10), 0.95))
+    many = given_interval(method(table(3, 7, 0, 10), 0.95))
     assert 0 < many.low < math.inf
     assert many.high == math.inf
-    assert _given(method(table(0, 10, 0, 20), 0.95)) == Interval(low=0.0, high=math.inf)
+    assert given_interval(method(table(0, 10, 0, 20), 0.95)) == Interval(low=0.0, high=math.inf)
 
 
 def test_everybody_on_both_sides(table: Table) -> None:
     """10/10 v 20/20: the statistic is n1 (1 - R)/R below 1, so Koopman's lower limit is 1/(1 + z^2/10)."""
-    interval = _given(ratio.koopman(table(10, 0, 20, 0), 0.95))
+    interval = given_interval(ratio.koopman(table(10, 0, 20, 0), 0.95))
     assert interval.low == pytest.approx(1 / (1 + 1.959963984540054**2 / 10), rel=1e-14)
     assert interval.high == pytest.approx(1 + 1.959963984540054**2 / 20, rel=1e-14)
 
@@ -105,7 +92,7 @@ def test_log_intervals_keep_every_digit(level: float, table: Table, exact_z: Cal
         for method, added in ((ratio.katz, 0.0), (ratio.walter, 0.5)):
             if cells[1] == cells[3] == 0 or (method is ratio.katz and 0 in (cells[0], cells[2])):
                 continue
-            interval = _given(method(table(*cells), level))
+            interval = given_interval(method(table(*cells), level))
             with mpmath.workdps(50):
                 a, b, c, d = (mpmath.mpf(cell) for cell in cells)
                 a, n1, c, n2 = a + added, a + b + added, c + added, c + d + added
@@ -118,10 +105,10 @@ def test_log_intervals_keep_every_digit(level: float, table: Table, exact_z: Cal
 def test_katz_without_events_is_walters_and_says_so(table: Table) -> None:
     """A group without events takes 1/2, named in the interval; with events nothing is added."""
     for cells in ((0, 10, 3, 7), (3, 7, 0, 10), (0, 10, 0, 20), (0, 10, 20, 0)):
-        interval = _given(ratio.katz(table(*cells), 0.95))
+        interval = given_interval(ratio.katz(table(*cells), 0.95))
         assert interval == ratio.walter(table(*cells), 0.95)
         assert interval.adjusted == "half"
-    assert _given(ratio.katz(table(3, 7, 5, 5), 0.95)).adjusted is None
+    assert given_interval(ratio.katz(table(3, 7, 5, 5), 0.95)).adjusted is None
 
 
 def test_katz_has_no_width_where_everybody_had_the_event(table: Table) -> None:
@@ -157,12 +144,7 @@ def test_intervals_hold_their_estimate(table: Table, cells: tuple[int, ...], lev
 def test_a_higher_level_is_never_narrower(table: Table, cells: tuple[int, ...]) -> None:
     """Each interval lies within the one of the next higher level."""
     for method in METHODS:
-        found = [method(table(*cells), level) for level in LEVELS]
-        for inner, outer in itertools.pairwise(found):
-            if isinstance(inner, Gap):
-                continue
-            assert _given(outer).low <= inner.low
-            assert inner.high <= _given(outer).high
+        assert_nested(method(table(*cells), level) for level in LEVELS)
 
 
 @settings(max_examples=80)
@@ -175,5 +157,5 @@ def test_swapped_groups_give_the_reciprocal(table: Table, cells: tuple[int, ...]
         if isinstance(one, Gap):
             assert other == one
             continue
-        for limit, turned in ((one.low, _given(other).high), (one.high, _given(other).low)):
+        for limit, turned in ((one.low, given_interval(other).high), (one.high, given_interval(other).low)):
             assert limit == pytest.approx(1 / turned if turned else math.inf, rel=1e-14)

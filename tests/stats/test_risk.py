@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import itertools
 import math
 from collections.abc import Callable
 from typing import Any
@@ -14,8 +13,8 @@ from hypothesis import strategies as st
 
 from fourcount.stats import risk
 from fourcount.stats.results import Gap, Interval
+from tables import LEVELS, assert_nested, given_interval
 
-LEVELS = (0.8, 0.9, 0.95, 0.99, 0.999)
 METHODS = (
     risk.wilson,
     risk.wilson_continuity,
@@ -32,11 +31,6 @@ GROUPS = st.tuples(
     st.integers(0, 80) | st.sampled_from([10**5, 10**9]), st.integers(0, 80) | st.sampled_from([10**5, 10**9])
 ).filter(any)
 """Events and others, somebody in the group."""
-
-
-def _given(interval: Interval | Gap) -> Interval:
-    assert isinstance(interval, Interval), interval
-    return interval
 
 
 def _wilson(x: Any, n: Any, z: Any) -> tuple[Any, Any]:
@@ -100,7 +94,10 @@ def _at_most(x: int, n: int, p: float) -> Any:
 def test_exact_limits_put_back_into_their_tails(events: int, total: int, level: float) -> None:
     """At each limit the binomial tail holds half of what the level leaves to 1, with or without half of P(X = x)."""
     half = (1 - level) / 2
-    exact, middle = _given(risk.clopper_pearson(events, total, level)), _given(risk.mid_p(events, total, level))
+    exact, middle = (
+        given_interval(risk.clopper_pearson(events, total, level)),
+        given_interval(risk.mid_p(events, total, level)),
+    )
     with mpmath.workdps(50):
         at_most, equal = _at_most(events, total, exact.low)
         assert float(1 - at_most + equal) == pytest.approx(half, rel=1e-12)
@@ -149,24 +146,24 @@ from the double's neighbourhood until the step was under 1e-25.
 @pytest.mark.parametrize(("method", "events", "total", "low", "high"), STORED)
 def test_limits_of_large_groups(method: Method, events: int, total: int, low: float, high: float) -> None:
     """Among them 1000 of 10^9, where scipy 1.17's own inverse of the beta distribution is wrong by a factor of 2."""
-    interval = _given(method(events, total, 0.95))
+    interval = given_interval(method(events, total, 0.95))
     assert interval.low == pytest.approx(low, rel=1e-12)
     assert interval.high == pytest.approx(high, rel=1e-12)
 
 
 def test_no_event_in_closed_form() -> None:
     """0 of 20: 1 - 0.025^(1/20) exact, 1 - 0.05^(1/20) mid-P (printed in Newcombe 1998, table I, from memory)."""
-    assert _given(risk.clopper_pearson(0, 20, 0.95)).high == pytest.approx(0.1684, abs=5e-5)
-    assert _given(risk.mid_p(0, 20, 0.95)).high == pytest.approx(0.1391, abs=5e-5)
-    assert _given(risk.clopper_pearson(20, 20, 0.95)).low == pytest.approx(1 - 0.1684, abs=5e-5)
-    assert _given(risk.clopper_pearson(0, 10**9, 0.95)).high == pytest.approx(-math.log(0.025) * 1e-9, rel=1e-8)
+    assert given_interval(risk.clopper_pearson(0, 20, 0.95)).high == pytest.approx(0.1684, abs=5e-5)
+    assert given_interval(risk.mid_p(0, 20, 0.95)).high == pytest.approx(0.1391, abs=5e-5)
+    assert given_interval(risk.clopper_pearson(20, 20, 0.95)).low == pytest.approx(1 - 0.1684, abs=5e-5)
+    assert given_interval(risk.clopper_pearson(0, 10**9, 0.95)).high == pytest.approx(-math.log(0.025) * 1e-9, rel=1e-8)
 
 
 @pytest.mark.parametrize("method", BETWEEN_0_AND_1)
 @pytest.mark.parametrize("total", [1, 2, 20, 10**6, 2 * 10**9])
 def test_nobody_and_everybody_have_a_limit_of_their_own(method: Method, total: int) -> None:
     """No event: from exactly 0. Nothing but events: up to exactly 1."""
-    nobody, everybody = _given(method(0, total, 0.95)), _given(method(total, total, 0.95))
+    nobody, everybody = given_interval(method(0, total, 0.95)), given_interval(method(total, total, 0.95))
     assert (nobody.low, everybody.high) == (0.0, 1.0)
     assert 0 < nobody.high <= 1
     assert 0 <= everybody.low < 1
@@ -175,8 +172,8 @@ def test_nobody_and_everybody_have_a_limit_of_their_own(method: Method, total: i
 def test_the_bare_textbook_formula_gives_no_zero_width() -> None:
     """Wald at 0 and at n is withheld; where it leaves 0 to 1 it is given as it is (1/29: below 0, Newcombe 1998)."""
     assert risk.wald(0, 20, 0.95) == risk.wald(20, 20, 0.95) == Gap("zero-width")
-    assert _given(risk.wald(1, 29, 0.95)).low < 0
-    assert _given(risk.wald(28, 29, 0.95)).high > 1
+    assert given_interval(risk.wald(1, 29, 0.95)).low < 0
+    assert given_interval(risk.wald(28, 29, 0.95)).high > 1
 
 
 @pytest.mark.parametrize("method", METHODS)
@@ -207,12 +204,7 @@ def test_a_higher_level_is_never_narrower(group: tuple[int, int]) -> None:
     """Each interval lies within the one of the next higher level."""
     events, total = group[0], sum(group)
     for method in METHODS:
-        found = [method(events, total, level) for level in LEVELS]
-        for inner, outer in itertools.pairwise(found):
-            if isinstance(inner, Gap):
-                continue
-            assert _given(outer).low <= inner.low
-            assert inner.high <= _given(outer).high
+        assert_nested(method(events, total, level) for level in LEVELS)
 
 
 @settings(max_examples=80)
@@ -225,5 +217,5 @@ def test_the_other_outcome_mirrors(group: tuple[int, int], level: float) -> None
         if isinstance(one, Gap):
             assert one == other
             continue
-        assert one.low == pytest.approx(1 - _given(other).high, abs=1e-13)
-        assert one.high == pytest.approx(1 - _given(other).low, abs=1e-13)
+        assert one.low == pytest.approx(1 - given_interval(other).high, abs=1e-13)
+        assert one.high == pytest.approx(1 - given_interval(other).low, abs=1e-13)
