@@ -35,7 +35,7 @@ def pytest_collection_modifyitems(items: list[pytest.Item]) -> None:
 
 @pytest.fixture(autouse=True)
 def _own_folders(tmp_path: Path, monkeypatch: pytest.MonkeyPatch) -> None:
-    """Settings and set-aside records of each test in a folder of its own."""
+    """Settings and the log of errors of each test in a folder of its own."""
     monkeypatch.setenv("FOURCOUNT_SETTINGS_FOLDER", str(tmp_path / "settings"))
     for folder in ("CONFIG", "DATA", "STATE"):
         monkeypatch.setenv(f"XDG_{folder}_HOME", str(tmp_path / folder.lower()))

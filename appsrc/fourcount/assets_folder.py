@@ -1,4 +1,4 @@
-"""Where the icons, the worked example and the record's schema lie."""
+"""Where the icon and the pictures of the README lie."""
 
 from __future__ import annotations
 

@@ -58,7 +58,6 @@ LEVEL_PREFIX = "Level: "
 
 ROLES = {"index": "index", "reference": "reference", "counted": "counted"}
 TOTAL = "total"
-OF = "of"
 
 GROUP_NAMES = {"first": "first group", "second": "second group"}
 CELL_NAMES = {
@@ -73,9 +72,6 @@ BASELINE_HINT = "{percent}"
 BASELINE_HINT_NEEDED = "needed"
 
 LINKS = {"help": "Methods and sources", "more": "More measures", "less": "Fewer measures"}
-WORKING_OPEN = "Show the working"
-WORKING_CLOSE = "Hide the working"
-FOLLOWS = "being computed…"
 
 MENUS = {"file": "&File", "edit": "&Edit", "table": "&Table", "view": "&View", "help": "&Help"}
 
