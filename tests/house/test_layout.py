@@ -55,12 +55,14 @@ def test_nothing_is_left_unfinished(file: Path) -> None:
 
 @pytest.mark.parametrize("file", TESTS, ids=shown)
 def test_every_test_says_what_it_tests(file: Path) -> None:
-    """Each test function has a docstring, and its first line is a sentence."""
+    """Each test function has a docstring, and what it begins with is a sentence."""
     functions = [
         node
         for node in ast.walk(ast.parse(file.read_text(encoding="utf-8")))
         if isinstance(node, ast.FunctionDef) and node.name.startswith("test_")
     ]
-    silent = [node.name for node in functions if not (ast.get_docstring(node) or "").splitlines()[:1]]
+    silent = [
+        node.name for node in functions if not (ast.get_docstring(node) or "").split("\n\n")[0].endswith((".", ".)"))
+    ]
     assert functions
     assert not silent
