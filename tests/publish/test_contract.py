@@ -11,6 +11,7 @@ import pytest
 from hypothesis import given, settings
 from hypothesis import strategies as st
 
+from contract_keys import METHOD_KEYS, TEST_KEYS
 from fourcount.appraisal.appraise import appraise
 from fourcount.publish.answer import answer
 from fourcount.publish.contract import contract
@@ -18,22 +19,11 @@ from fourcount.record.outcome import DESIGNS, Outcome, Patient
 from fourcount.record.paper import FAMILIES, Choices
 
 MEASURES = ["risk_index", "risk_reference", "risk_difference", "number_needed", "risk_ratio", "odds_ratio"]
-RISK_METHODS = {"wilson", "wilson-continuity", "clopper-pearson", "mid-p", "wald", "agresti-coull", "jeffreys"}
 METHODS = {
-    "risk_index": RISK_METHODS,
-    "risk_reference": RISK_METHODS,
-    "risk_difference": {"newcombe", "miettinen-nurminen", "agresti-caffo", "wald"},
-    "risk_ratio": {"koopman", "miettinen-nurminen", "katz"},
-    "odds_ratio": {
-        "baptista-pike-mid-p",
-        "conditional-exact",
-        "conditional-mid-p",
-        "miettinen-nurminen",
-        "woolf",
-        "gart",
-    },
+    "risk_index": METHOD_KEYS["risk"],
+    "risk_reference": METHOD_KEYS["risk"],
+    **{measure: METHOD_KEYS[measure] for measure in ("risk_difference", "risk_ratio", "odds_ratio")},
 }
-TESTS = {"fisher", "fisher-mid-p", "pearson", "n-minus-1"}
 KEYS = ["format", "design", "level", "intervals", "measures", "methods", "adjusted_methods"]
 KEYS += ["conditional_odds_ratio", "tests", "conversion", "cautions"]
 
@@ -161,7 +151,7 @@ def check_all(published: dict[str, Any]) -> None:
     check_figure(published["measures"]["odds_ratio"], 0)
     check_methods(published)
     check_number(published["conditional_odds_ratio"], 0)
-    assert set(published["tests"]) == TESTS
+    assert set(published["tests"]) == set(TEST_KEYS)
     for p in published["tests"].values():
         check_number(p, 0, 1)
     if not withheld(published["conversion"]):

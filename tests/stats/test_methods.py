@@ -9,25 +9,13 @@ from collections.abc import Callable
 
 import pytest
 
+from contract_keys import METHOD_KEYS, TEST_KEYS
 from fourcount.stats import methods
 from fourcount.stats.entries.entry import Method
 from fourcount.stats.results import GAP_KEYS, Counts, Gap, Interval
 
 Table = Callable[..., Counts]
 
-KEYS = {
-    "risk": {"wilson", "wilson-continuity", "clopper-pearson", "mid-p", "wald", "agresti-coull", "jeffreys"},
-    "risk_difference": {"newcombe", "miettinen-nurminen", "agresti-caffo", "wald"},
-    "risk_ratio": {"koopman", "miettinen-nurminen", "katz"},
-    "odds_ratio": {
-        "baptista-pike-mid-p",
-        "conditional-exact",
-        "conditional-mid-p",
-        "miettinen-nurminen",
-        "woolf",
-        "gart",
-    },
-}
 CELLS = (0, 1, 2, 5, 10**9)
 LEVELS = (0.8, 0.95, 0.999)
 CONDITIONAL = {"baptista-pike-mid-p", "conditional-exact", "conditional-mid-p"}
@@ -51,8 +39,8 @@ print(sorted({name.split(".")[0] for name in sys.modules} & {"numpy", "scipy", "
 def test_the_keys_are_those_that_other_programs_read() -> None:
     """Each measure has exactly the methods of the JSON contract, each key once."""
     listed = [(entry.measure, entry.key) for entry in methods.METHODS]
-    assert sorted(listed) == sorted((measure, key) for measure, keys in KEYS.items() for key in keys)
-    assert [entry.key for entry in methods.TESTS] == ["fisher", "fisher-mid-p", "pearson", "n-minus-1"]
+    assert sorted(listed) == sorted((measure, key) for measure, keys in METHOD_KEYS.items() for key in keys)
+    assert [entry.key for entry in methods.TESTS] == list(TEST_KEYS)
 
 
 @pytest.mark.parametrize("entry", [*methods.METHODS, *methods.TESTS], ids=lambda entry: entry.title)
@@ -68,7 +56,7 @@ def test_families_name_entries_of_the_table() -> None:
     """Every key of every family is found, and a look-up returns the entry asked for."""
     assert set(methods.FAMILIES) == {"score", "textbook", "exact"}
     for family in methods.FAMILIES.values():
-        for measure in KEYS:
+        for measure in METHOD_KEYS:
             key = getattr(family, measure)
             found = methods.method(measure, key)
             assert (found.measure, found.key) == (measure, key)

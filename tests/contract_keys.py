@@ -1,0 +1,18 @@
+"""The keys of methods and tests that other programs read. Written out here once, so that none is renamed unseen."""
+
+from __future__ import annotations
+
+METHOD_KEYS = {
+    "risk": {"wilson", "wilson-continuity", "clopper-pearson", "mid-p", "wald", "agresti-coull", "jeffreys"},
+    "risk_difference": {"newcombe", "miettinen-nurminen", "agresti-caffo", "wald"},
+    "risk_ratio": {"koopman", "miettinen-nurminen", "katz"},
+    "odds_ratio": {
+        "baptista-pike-mid-p",
+        "conditional-exact",
+        "conditional-mid-p",
+        "miettinen-nurminen",
+        "woolf",
+        "gart",
+    },
+}
+TEST_KEYS = ("fisher", "fisher-mid-p", "pearson", "n-minus-1")
