@@ -271,7 +271,7 @@ def test_another_level_is_asked_for(example: Hands, asked: Callable[..., list[tu
     """The question offers the level in use; the answer becomes an entry of its own."""
     shown = asked("97.5%")
     example.choose(example.window.says.level, labels.OTHER_LEVEL)
-    assert shown == [("95", "")]
+    assert shown == [("95%", "")]
     assert example.window.session.record.choices.level == pytest.approx(0.975)
     assert example.window.says.level.currentText() == "97.5%"
     assert example.window.says.level.itemText(example.window.says.level.count() - 1) == labels.OTHER_LEVEL
@@ -289,7 +289,7 @@ def test_bad_levels_are_asked_about_again(example: Hands, asked: Callable[..., l
     assert problems[2] == "50: a confidence level here lies between 80% and 99.9%"
     assert problems[3].startswith("100: ")
     assert problems[5].startswith("-95: ")
-    assert [now for now, _ in shown][:3] == ["95", "abc", "50"]
+    assert [now for now, _ in shown][:3] == ["95%", "abc", "50"]
     assert example.window.session.record.choices.level == pytest.approx(0.9)
     assert example.window.says.level.currentText() == "90%"
 

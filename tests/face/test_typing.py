@@ -48,6 +48,7 @@ def test_four_counts_give_sentence_rows_and_picture(hands: Hands) -> None:
     assert hands.rows["risk_reference"] == "Risk, reference group: 17.1%, 13.8 to 21.1%"
     assert hands.rows["risk_ratio"].startswith("Risk ratio: 0.54")
     assert hands.rows["odds_ratio"].startswith("Odds ratio: 0.49")
+    assert hands.p.startswith("p < 0.001 by the (N−1) chi-square test")
     assert hands.window.patient.picture.isVisible()
     assert not hands.window.patient.waits.isVisible()
 
@@ -114,9 +115,9 @@ def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) 
         window.header.title, window.header.source, window.printed.design, window.printed.event_words,
         window.printed.welcome, window.printed.span, window.printed.form, window.printed.layout_choice,
         grid.headings["left"], grid.headings["right"], grid.labels["first"], grid.labels["second"],
-        *grid.cells.values(), *window.printed.links, *(example.row(key) for key in MEASURES), window.says.more,
-        window.says.family, window.says.level, window.says.help, *window.says.copies, window.patient.baseline,
-        window.patient.source, window.patient.effect, window.patient.copy, window.cautions,
+        *grid.cells.values(), *window.printed.links, *(example.row(key) for key in (*MEASURES, "test")),
+        window.says.family, window.says.level, window.says.more, window.says.help, *window.says.copies,
+        window.patient.baseline, window.patient.source, window.patient.effect, window.patient.copy, window.cautions,
     ]  # fmt: skip
     example.click(window.header.title)
     seen = []
