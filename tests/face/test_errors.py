@@ -1,4 +1,4 @@
-"""An unexpected error: one sentence on screen, its kind and place in the log, what was typed nowhere but in the window."""
+"""An unexpected error: one sentence on screen, kind and place in the log, what was typed nowhere but in the window."""
 
 from __future__ import annotations
 
