@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import sys
+import threading
 from collections.abc import Callable, Iterator
 from pathlib import Path
 from typing import TYPE_CHECKING
@@ -122,6 +123,9 @@ def test_an_error_while_computing_apart_is_told_too(
     listening.qtbot.waitUntil(listening.window.banner.isVisible)
     assert SECRET not in (folder / LOG_NAME).read_text(encoding="utf-8")
     assert listening.texts == ("38", "374", "70", "338")
+    listening.window._later.close()
+    workers = [thread for thread in threading.enumerate() if thread.name == "fourcount-later"]
+    listening.qtbot.waitUntil(lambda: not any(thread.is_alive() for thread in workers))
 
 
 def test_an_interruption_is_no_error(folder: Path, monkeypatch: pytest.MonkeyPatch) -> None:

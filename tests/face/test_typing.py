@@ -5,6 +5,7 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 import pytest
+from PySide6.QtGui import QGuiApplication
 
 from fourcount.record.outcome import CELLS
 from fourcount.wording import labels
@@ -163,6 +164,46 @@ def test_arrows_follow_the_eye_when_groups_run_across(hands: Hands) -> None:
     assert hands.field == "second_right_text"
     hands.press("Left")
     assert hands.field == "first_right_text"
+
+
+def test_tab_follows_the_eye_when_groups_run_across(hands: Hands) -> None:
+    """With a group in each column, reading order goes from group to group, and so does Tab."""
+    hands.do("layout")
+    hands.click(hands.window.printed.grid.cells[CELLS[0]])
+    seen = []
+    for _ in CELLS:
+        seen.append(hands.field)
+        hands.press("Tab")
+    assert seen == ["first_left_text", "second_left_text", "first_right_text", "second_right_text"]
+
+
+def test_what_has_the_focus_is_in_view(example: Hands) -> None:
+    """In a small window the page scrolls to whatever Tab, an arrow or a command leads to."""
+    window = example.window
+    window.resize(480, 360)
+    inside = window.centralWidget()
+    example.qtbot.waitUntil(lambda: window.cautions.geometry().bottom() < inside.height() < 360)
+    example.click(window.header.title)
+    out_of_view = []
+    for _ in range(40):
+        example.press("Tab")
+        if example.focus.visibleRegion().isEmpty():
+            out_of_view.append(example.focus.accessibleName())
+    assert out_of_view == []
+    for command in ("baseline", "first-cell"):
+        example.do(command)
+        assert not example.focus.visibleRegion().isEmpty()
+    example.press("Down")
+    assert not example.focus.visibleRegion().isEmpty()
+
+
+def test_a_pasted_block_loses_nothing(hands: Hands) -> None:
+    """Several lines pasted into one cell stay there, marked, until somebody takes them apart."""
+    QGuiApplication.clipboard().setText("38 374\n70 339")
+    hands.press("Ctrl+V")
+    assert "38" in hands.texts[0]
+    assert "339" in hands.texts[0]
+    assert hands.window.printed.grid.cells[CELLS[0]].marked
 
 
 def test_arrows_stay_inside_a_count_until_its_end(hands: Hands) -> None:
