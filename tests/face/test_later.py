@@ -7,6 +7,7 @@ from collections.abc import Callable, Iterator
 from typing import TYPE_CHECKING
 
 import pytest
+from PySide6.QtGui import QGuiApplication
 from pytestqt.qtbot import QtBot
 
 from fourcount.appraisal import appraise as room
@@ -89,6 +90,28 @@ def test_typing_goes_on_meanwhile(waiting: Hands, gate: Gate) -> None:
     gate.open.set()
     waiting.qtbot.waitUntil(lambda: FOLLOWS not in str(waiting.rows))
     assert waiting.rows["risk_index"].startswith("Risk, index group: 9.9%, ")
+
+
+def test_workings_open_meanwhile(waiting: Hands) -> None:
+    """How a figure is computed can be read before the figure is there, for every row."""
+    for key in (*waiting.rows, "test"):
+        waiting.click(waiting.row(key))
+        assert waiting.window.says.working.isVisible()
+        assert len(waiting.window.says.working.text()) > 60
+
+
+@pytest.mark.parametrize("command", ["copy-text", "copy-table"])
+def test_a_copy_never_holds_a_figure_that_is_still_to_follow(waiting: Hands, gate: Gate, command: str) -> None:
+    """What leaves the window is whole: a letter cannot be told that a figure will follow."""
+    clipboard = QGuiApplication.clipboard()
+    clipboard.setText("before")
+    gate.open.set()
+    waiting.do(command)
+    assert "will follow" not in clipboard.text()
+    waiting.qtbot.waitUntil(lambda: FOLLOWS not in str(waiting.rows))
+    waiting.do(command)
+    assert clipboard.text() != "before"
+    assert "will follow" not in clipboard.text()
 
 
 def test_an_answer_for_a_table_that_is_gone_is_not_shown(waiting: Hands, gate: Gate) -> None:
