@@ -50,6 +50,9 @@ COMMANDS = (
 )
 """All commands in the order of the menus."""
 
+MORE_KEYS = {"redo": "Ctrl+Y", "bigger": "Ctrl+="}
+"""Further keys that people expect, taken where the platform does not have them already."""
+
 
 def make_actions(window: QMainWindow) -> dict[str, QAction]:
     """One action for each command, not connected yet."""
@@ -61,10 +64,9 @@ def make_actions(window: QMainWindow) -> dict[str, QAction]:
             action.setShortcut(QKeySequence(command.keys))
         elif command.keys is not None:
             action.setShortcuts(command.keys)
-        if command.key == "redo":
-            action.setShortcuts([*QKeySequence.keyBindings(Standard.Redo), QKeySequence("Ctrl+Y")])
-        if command.key == "bigger":
-            action.setShortcuts([*QKeySequence.keyBindings(Standard.ZoomIn), QKeySequence("Ctrl+=")])
+        extra = MORE_KEYS.get(command.key)
+        if extra and QKeySequence(extra) not in action.shortcuts():
+            action.setShortcuts([*action.shortcuts(), QKeySequence(extra)])
         if command.key == "quit" and action.shortcut().isEmpty():
             action.setShortcut(QKeySequence("Ctrl+Q"))
         actions[command.key] = action

@@ -19,9 +19,6 @@ if TYPE_CHECKING:
 SAID_BESIDE = ("baseline-uncertain",)
 """Cautions that the third column says in full beside the figure they concern."""
 
-BAR = 12
-"""The width kept for the scroll bar, whether it is there or not."""
-
 HIGHEST_SHARE = 0.26
 """The largest share of the window's height that the strip takes before it scrolls."""
 
@@ -46,7 +43,7 @@ class CautionsText(QWidget):
         return round(self._run(None, width))
 
     def sizeHint(self) -> QSize:
-        return QSize(self._look.px(400), self.heightForWidth(max(self.width(), 1)))
+        return QSize(self._look.px(400), 0)
 
     def minimumSizeHint(self) -> QSize:
         return QSize(0, 0)
@@ -95,6 +92,7 @@ class CautionsStrip(QScrollArea):
         self.setFrameShape(QFrame.Shape.NoFrame)
         self.setWidgetResizable(True)
         self.setVerticalScrollBar(ScrollBar(look))
+        self.setVerticalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOn)
         self.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
         self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
         self.setFocusPolicy(Qt.FocusPolicy.TabFocus)
@@ -122,7 +120,7 @@ class CautionsStrip(QScrollArea):
 
     def fit(self) -> None:
         """Take the height that the text needs, up to a share of the window's."""
-        needed = self._inside.heightForWidth(max(self.width() - BAR, 200)) + 1
+        needed = self._inside.heightForWidth(max(self.width() - self.verticalScrollBar().sizeHint().width(), 200)) + 1
         highest = max(int(self.window().height() * HIGHEST_SHARE), self._look.px(56))
         if self.height() != min(needed, highest):
             self.setFixedHeight(min(needed, highest))

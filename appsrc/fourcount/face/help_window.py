@@ -30,6 +30,7 @@ class HelpWindow(QDialog):
         self.text.setAccessibleName(title)
         self.text.setFrameShape(QTextEdit.Shape.NoFrame)
         self.text.setVerticalScrollBar(ScrollBar(look))
+        self.text.setVerticalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOn)
         flags = Qt.TextInteractionFlag
         self.text.setTextInteractionFlags(flags.TextSelectableByMouse | flags.TextSelectableByKeyboard)
         buttons = QDialogButtonBox(QDialogButtonBox.StandardButton.Close)

@@ -10,7 +10,11 @@ from fourcount.face.look import Look
 
 
 class ScrollBar(QScrollBar):
-    """A vertical bar drawn in the palette's outline."""
+    """A vertical bar drawn in the palette's outline.
+
+    It always keeps its room and is empty where there is nothing to scroll: a bar that came and went would change the
+    width of the text, and with it the height that decides whether the bar is needed.
+    """
 
     def __init__(self, look: Look) -> None:
         super().__init__(Qt.Orientation.Vertical)
@@ -20,6 +24,11 @@ class ScrollBar(QScrollBar):
         return QSize(12, super().sizeHint().height())
 
     def paintEvent(self, event: QPaintEvent) -> None:
+        if self.maximum() == self.minimum():
+            painter = QPainter(self)
+            painter.fillRect(self.rect(), self._look.colour("page"))
+            painter.end()
+            return
         from PySide6.QtWidgets import QStyle, QStyleOptionSlider  # the first paint needs no bar
 
         option = QStyleOptionSlider()

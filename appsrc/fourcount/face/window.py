@@ -23,6 +23,7 @@ from fourcount.face.look import APPEARANCES, Look
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
+from fourcount.record import editing
 from fourcount.record.outcome import CELLS, Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
@@ -219,8 +220,9 @@ class MainWindow(QMainWindow):
         """Whether the window holds typed text that is not just the worked example."""
         from fourcount.wording.example import worked_example
 
-        outcomes = self.session.record.outcomes
-        return outcomes not in (Record().outcomes, worked_example().outcomes)
+        choices = self.session.record.choices
+        starts = (Record(choices=choices), editing.with_choices(worked_example(), choices))
+        return self.session.record not in starts
 
     # Slots
 

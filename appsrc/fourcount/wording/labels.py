@@ -87,7 +87,7 @@ COMMANDS = {
     "swap": "&Swap groups",
     "count-other": "&Count the other outcome",
     "form": "Print &form: 38 · 374 or 38 of 412",
-    "layout": "&Groups down or across",
+    "layout": "Groups &down or across",
     "clear": "C&lear the counts",
     "first-cell": "&Go to the first count",
     "baseline": "Go to the starting &risk",

@@ -11,6 +11,7 @@ Group = Literal["index", "reference"]
 STAND_INS = {"index": "index group", "reference": "reference group"}
 EVENT_STAND_IN = "had the event"
 OTHER_STAND_IN = "did not have the event"
+WITHOUT = "did not have the outcome “{outcome}”"
 PREPOSITIONS = ("within", "in", "at", "over", "after", "by", "during")
 
 
@@ -56,7 +57,10 @@ def event_words(outcome: Outcome) -> str:
     """The counted event as the reader's sentence says it: "fell at least once"."""
     words = outcome.event_words_text.strip()
     heading = outcome.event_heading_text.strip()
-    return words or (f"{EVENT_STAND_IN} “{heading}”" if heading else EVENT_STAND_IN)
+    if words or heading:
+        return words or f"{EVENT_STAND_IN} “{heading}”"
+    other = outcome.other_words_text.strip() or outcome.other_heading_text.strip()
+    return WITHOUT.format(outcome=other) if other else EVENT_STAND_IN
 
 
 def other_words(outcome: Outcome) -> str:
@@ -65,6 +69,13 @@ def other_words(outcome: Outcome) -> str:
     if named:
         return named
     return "did not" if outcome.event_words_text.strip() else OTHER_STAND_IN
+
+
+def other_words_alone(outcome: Outcome) -> str:
+    """The other outcome where it is the one that is counted, and a bare "did not" would say nothing."""
+    named = outcome.other_words_text.strip() or outcome.other_heading_text.strip()
+    event = outcome.event_words_text.strip() or outcome.event_heading_text.strip()
+    return named or (WITHOUT.format(outcome=event) if event else OTHER_STAND_IN)
 
 
 def event_key(outcome: Outcome) -> str:
