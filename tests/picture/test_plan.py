@@ -49,6 +49,7 @@ def holds(without: Fraction, with_: Fraction, people: int) -> bool:
         (0.095, 0.105, 100),  # 10 and 11: one icon apart, as in truth
         (0.045, 0.060, 1_000),  # 5 and 6: half an icon is lost, which is not under half
         (0.045, 0.159, 100),  # 5 and 16 for 11.4: 0.4 of an icon
+        (0.156, 0.102, 1_000),  # 16 and 10 for 5.4: 0.6 of an icon is a ninth of it
         (0.504, 0.446, 1_000),  # 50 and 45 for 5.8: 0.8 of an icon is no tenth of it
         (0.504, 0.346, 100),  # 50 and 35 for 15.8: 0.8 of an icon is under a tenth of it
         (0.17, 0.171, 1_000),
