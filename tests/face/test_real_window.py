@@ -21,7 +21,7 @@ def test_a_table_is_answered_by_keyboard_alone(hands: Any) -> None:
     hands.press("Tab")
     hands.type("Usual care")
     assert "with usual care" in hands.sentence
-    hands.press("Shift+Tab", 9)
+    hands.press("Shift+Tab", 10)
     assert hands.focus is hands.window.printed.design
     hands.press("End")
     assert "The odds" in hands.sentence

@@ -25,7 +25,7 @@ class Command(NamedTuple):
 Standard = QKeySequence.StandardKey
 COMMANDS = (
     Command("new", "file", Standard.New),
-    Command("example", "file", "Ctrl+E"),
+    Command("example", "file", "Ctrl+Shift+E"),
     Command("quit", "file", Standard.Quit, parts_from_last=True),
     Command("undo", "edit", Standard.Undo),
     Command("redo", "edit", Standard.Redo),
@@ -39,6 +39,7 @@ COMMANDS = (
     Command("first-cell", "table", "Ctrl+1", parts_from_last=True),
     Command("baseline", "table", "Ctrl+2"),
     Command("clear", "table", "Ctrl+Shift+Backspace"),
+    Command("level", "table", "Ctrl+L"),
     Command("bigger", "view", Standard.ZoomIn),
     Command("smaller", "view", Standard.ZoomOut),
     Command("actual", "view", "Ctrl+0"),

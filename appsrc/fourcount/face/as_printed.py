@@ -38,6 +38,7 @@ class AsPrinted(QWidget):
         super().__init__()
         self._look = look
         self.design = ChoiceField(look, labels.FIELDS["design"], tuple(labels.DESIGNS.items()))
+        self.name = TextField(look, "name_text", labels.FIELDS["name_text"], labels.HINTS["name_text"])
         self.event_words = TextField(look, "left_words_text", labels.FIELDS["left_words_text"], labels.HINTS["words"])
         self.welcome = ChoiceField(look, labels.FIELDS["welcome"], tuple(labels.WELCOME.items()), whole=True)
         self.span = TextField(look, "span_text", labels.FIELDS["span_text"], labels.HINTS["span_text"])
@@ -55,6 +56,8 @@ class AsPrinted(QWidget):
         self.design.show_choice(outcome.design)
         self.event_words.field = f"{outcome.counted}_words_text"
         self.event_words.show_text(outcome.event_words_text)
+        self.event_words.setPlaceholderText(self._event_hint(outcome))
+        self.name.show_text(outcome.name_text)
         self.welcome.show_choice("welcome" if outcome.welcome else "unwelcome")
         self.span.show_text(outcome.span_text)
         self.form.show_choice("events-of-total" if isinstance(outcome.table, EventsOfTotal) else "events-and-others")
@@ -62,6 +65,14 @@ class AsPrinted(QWidget):
         self.grid.show_state(outcome, findings)
         self.example.setVisible(outcome == Outcome())
         self._show_marks(findings)
+
+    def _event_hint(self, outcome: Outcome) -> str:
+        """What the event is called while nothing is typed: that it is not the other one, where that is named."""
+        if not (outcome.other_words_text.strip() or outcome.other_heading_text.strip()):
+            return labels.HINTS["words"]
+        from fourcount.wording.names import event_words
+
+        return event_words(outcome)
 
     def _show_marks(self, findings: OutcomeFindings | None) -> None:
         reasons: dict[str, str] = {}
@@ -77,18 +88,19 @@ class AsPrinted(QWidget):
         self._form_rows = QGridLayout()
         self._form_rows.setContentsMargins(0, 0, 0, 0)
         self._form_rows.setColumnStretch(1, 1)
-        names = ("design", "left_words_text", "span_text", "form")
+        names = ("design", "name_text", "left_words_text", "span_text", "form")
         for row, name in enumerate(names):
             self._form_rows.addWidget(Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False), row, 0)
         self._form_rows.addWidget(self.design, 0, 1, 1, 2)
-        self._form_rows.addWidget(self.event_words, 1, 1)
+        self._form_rows.addWidget(self.name, 1, 1)
         self._form_rows.addWidget(self.welcome, 1, 2)
-        self._form_rows.addWidget(self.span, 2, 1, 1, 2)
+        self._form_rows.addWidget(self.event_words, 2, 1, 1, 2)
+        self._form_rows.addWidget(self.span, 3, 1, 1, 2)
         printed = QHBoxLayout()
         printed.addWidget(self.form, 3)
         printed.addWidget(self.layout_choice, 3)
         printed.setSpacing(12)
-        self._form_rows.addLayout(printed, 3, 1, 1, 2)
+        self._form_rows.addLayout(printed, 4, 1, 1, 2)
         links = FlowLayout(self._look)
         for link in self.links:
             links.addWidget(link)
@@ -103,7 +115,7 @@ class AsPrinted(QWidget):
         self._on_look_changed()
 
     def _connect_all(self) -> None:
-        for field in (self.event_words, self.span):
+        for field in (self.name, self.event_words, self.span):
             field.edited.connect(self.edited)
             field.left.connect(self.left)
         self.grid.edited.connect(self.edited)

@@ -19,7 +19,7 @@ if TYPE_CHECKING:
 SAID_BESIDE = ("baseline-uncertain",)
 """Cautions that the third column says in full beside the figure they concern."""
 
-HIGHEST_SHARE = 0.26
+HIGHEST_SHARE = 0.24
 """The largest share of the window's height that the strip takes before it scrolls."""
 
 

@@ -97,11 +97,8 @@ class Commands(QObject):
         self._session.change_record(editing.with_family(self._session.record, key))
 
     def choose_level(self, key: str) -> None:
-        """Take a confidence level, a fraction as text, or ask for another one."""
-        if key == "other":
-            self._ask_level()
-        else:
-            self._session.change_record(editing.with_level(self._session.record, float(key)))
+        """Take a confidence level, a fraction as text."""
+        self._session.change_record(editing.with_level(self._session.record, float(key)))
 
     def copy_text(self) -> None:
         """Copy the findings as text."""
@@ -119,8 +116,8 @@ class Commands(QObject):
     def _tell(self, key: str, done: bool) -> None:
         self.noticed.emit(labels.COPIED[key] if done else labels.NOTHING_TO_COPY)
 
-    def _ask_level(self) -> None:
-        """Ask until a level can be read or the question is put away."""
+    def ask_level(self) -> None:
+        """Ask for any other level until it can be read or the question is put away."""
         from fourcount.record.entry.level import read_level
         from fourcount.record.entry.readings import Proportion, Unreadable
         from fourcount.wording import numbers
@@ -133,4 +130,3 @@ class Commands(QObject):
                 self._session.change_record(editing.with_level(self._session.record, reading.value))
                 break
             now, problem = text, mark_text(reading) if isinstance(reading, Unreadable) else ""
-        self._session.announce()

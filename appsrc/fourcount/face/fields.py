@@ -134,6 +134,9 @@ class QuietField(TextField):
         painter.setFont(self.font())
         painter.setPen(self._look.colour("ink"))
         words = self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, self.width())
+        tip = self.text() if words != self.text() else ""
+        if tip != self.toolTip():
+            self.setToolTip(tip)
         painter.drawText(self.rect(), self.alignment() | Qt.AlignmentFlag.AlignVCenter, words)
         if self.underMouse():
             draw_underline(self, painter, self._look)
@@ -179,6 +182,7 @@ class ChoiceField(QComboBox):
         index = self.findData(key)
         if index != self.currentIndex():
             self.setCurrentIndex(index)
+            self.updateGeometry()
 
     def show_words(self, words: dict[str, str]) -> None:
         """Give some of the choices other words."""

@@ -139,14 +139,13 @@ class ForOnePatient(QWidget):
     def _build(self) -> None:
         self._fields = QGridLayout()
         self._fields.setContentsMargins(0, 0, 0, 0)
-        self._fields.setColumnStretch(1, 3)
-        self._fields.setColumnStretch(2, 8)
-        names = ("starting_risk_text", "effect")
+        self._fields.setColumnStretch(1, 1)
+        names = ("starting_risk_text", "starting_risk_source_text", "effect")
         for row, name in enumerate(names):
             self._fields.addWidget(Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False), row, 0)
         self._fields.addWidget(self.baseline, 0, 1)
-        self._fields.addWidget(self.source, 0, 2)
-        self._fields.addWidget(self.effect, 1, 1, 1, 2)
+        self._fields.addWidget(self.source, 1, 1)
+        self._fields.addWidget(self.effect, 2, 1)
         copies = FlowLayout(self._look)
         copies.addWidget(self.copy)
         self._column = QVBoxLayout(self)

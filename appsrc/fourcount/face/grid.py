@@ -48,6 +48,11 @@ class CountCell(TextField):
         super().show_text(text)
         self._fit_text()
 
+    def show_known(self, text: str) -> None:
+        """Show in an empty cell the number that is known already from what stands beside it."""
+        if text != self.placeholderText():
+            self.setPlaceholderText(text)
+
     def resizeEvent(self, event: QResizeEvent) -> None:
         super().resizeEvent(event)
         self._fit_text()
@@ -91,7 +96,8 @@ class CountCell(TextField):
         painter.setPen(QPen(self._look.colour(part), width))
         inset = width / 2
         painter.drawRoundedRect(QRectF(self.rect()).adjusted(inset, inset, -inset, -inset), 4, 4)
-        if self.marked:
+        text = self.fontMetrics().horizontalAdvance(self.text())
+        if self.marked and text + self._look.px(28) < self.width():
             painter.setFont(self._look.font("strong"))
             painter.drawText(self.rect().adjusted(8, 0, 0, 0), Qt.AlignmentFlag.AlignVCenter, "!")
         painter.end()
@@ -174,6 +180,7 @@ class Grid(QWidget):
         from fourcount.wording.numbers import whole
 
         totals = findings.totals if findings else None
+        self._show_known(findings, of_total)
 
         def words(key: str) -> str:
             value = getattr(totals, key) if totals else None
@@ -186,6 +193,18 @@ class Grid(QWidget):
         self.totals["left"].setText(words("left"))
         self.totals["right"].setText(words(right))
         self.totals["everyone"].setText(words(everyone))
+        self._fit_totals()
+
+    def _show_known(self, findings: OutcomeFindings | None, of_total: bool) -> None:
+        """Fill an empty right cell, as a hint, where its number follows from a left one such as 38/412."""
+        from fourcount.wording.numbers import whole
+
+        for position in ("first", "second"):
+            value = getattr(findings.totals, position if of_total else f"{position}_right") if findings else None
+            self.cells[f"{position}_right_text"].show_known("" if value is None else whole(value))
+
+    def _fit_totals(self) -> None:
+        """Set all totals smaller where one of them is long."""
         longest = max(len(label.text()) for label in self.totals.values())
         font = self._look.font("total" if longest <= LONGEST_IN_FULL else "small")
         for label in self.totals.values():
@@ -214,6 +233,15 @@ class Grid(QWidget):
         for column, stretch in enumerate((6, 5, 5, 4) if of_total else (7, 5, 5, 2)):
             self._layout.setColumnStretch(column, stretch)
         self._set_alignment(layout)
+        before: QWidget = self.labels["second"]
+        for field in self._reading_order():
+            self.setTabOrder(before, self.cells[field])
+            before = self.cells[field]
+
+    def _reading_order(self) -> tuple[str, ...]:
+        """The cells line by line, as they stand."""
+        across = self._arranged is not None and self._arranged[0] == "across"
+        return (CELLS[0], CELLS[2], CELLS[1], CELLS[3]) if across else CELLS
 
     def _place(self, row: int, column: int, widget: QWidget, under: QWidget | None = None) -> None:
         """Put a widget into a block of the upright grid, with a small line under it or over the block's height."""
@@ -249,20 +277,38 @@ class Grid(QWidget):
             field.left.connect(self.left)
         for cell in self.cells.values():
             cell.moved.connect(self._on_moved)
+        self.labels["first"].returnPressed.connect(self._on_first_label_done)
+        self.labels["second"].returnPressed.connect(self._on_second_label_done)
         self._look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 
     def _on_moved(self, field: str, key: Qt.Key) -> None:
-        """Go to the cell that lies in the direction of an arrow key; Enter goes on in reading order."""
-        upright = self._arranged is None or self._arranged[0] == "down"
-        order = list(CELLS) if upright else [CELLS[0], CELLS[2], CELLS[1], CELLS[3]]
+        """Go to the cell in the direction of an arrow key; Enter goes on in reading order, past what is known."""
+        order = self._reading_order()
         at = order.index(field)
         steps = {Qt.Key.Key_Up: -2, Qt.Key.Key_Down: 2, Qt.Key.Key_Left: -1}
         target = at + steps.get(key, 1)
+        goes_on = key in (Qt.Key.Key_Return, Qt.Key.Key_Enter)
+        while (
+            goes_on
+            and target < len(order)
+            and self.cells[order[target]].placeholderText()
+            and not (self.cells[order[target]].text())
+        ):
+            target += 1
         if 0 <= target < len(order):
-            cell = self.cells[order[target]]
-            cell.setFocus(Qt.FocusReason.OtherFocusReason)
-            cell.selectAll()
+            self._go_to(order[target])
+
+    def _go_to(self, field: str) -> None:
+        cell = self.cells[field]
+        cell.setFocus(Qt.FocusReason.OtherFocusReason)
+        cell.selectAll()
+
+    def _on_first_label_done(self) -> None:
+        self._go_to(CELLS[0])
+
+    def _on_second_label_done(self) -> None:
+        self._go_to(CELLS[2])
 
     def _on_look_changed(self) -> None:
         px = self._look.px
@@ -276,3 +322,4 @@ class Grid(QWidget):
             label.setPalette(palette)
         for label in (*self.roles.values(), self.total_heading):
             label.setFont(self._look.font("small"))
+        self._fit_totals()

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from PySide6.QtCore import Signal
+from PySide6.QtCore import Qt, Signal
 from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QHBoxLayout, QSizePolicy, QWidget
 
@@ -33,11 +33,12 @@ class Header(QWidget):
         )
         self.source = QuietField(look, "source_text", labels.FIELDS["source_text"], labels.HINTS["source_text"])
         self.notice = Words(look, "body", "muted", wraps=False)
+        self.notice.setSizePolicy(QSizePolicy.Policy.Ignored, QSizePolicy.Policy.Preferred)
+        self.notice.setAlignment(Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter)
         self._row = QHBoxLayout(self)
         self._row.addWidget(self.title, 5)
         self._row.addWidget(self.source, 5)
-        self._row.addStretch(1)
-        self._row.addWidget(self.notice)
+        self._row.addWidget(self.notice, 4)
         self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
         for field in (self.title, self.source):
             field.edited.connect(self.edited)

@@ -5,7 +5,7 @@ from __future__ import annotations
 from typing import NamedTuple
 
 from PySide6.QtCore import QEvent, QRectF, QSize, Qt, Signal
-from PySide6.QtGui import QEnterEvent, QFocusEvent, QKeyEvent, QMouseEvent, QPainter, QPaintEvent, QPen
+from PySide6.QtGui import QEnterEvent, QFocusEvent, QKeyEvent, QMouseEvent, QPainter, QPaintEvent
 from PySide6.QtWidgets import QSizePolicy, QWidget
 
 from fourcount.face.look import Look
@@ -38,6 +38,38 @@ def places(look: Look, width: float) -> Places:
     strip = width - strip_width
     estimate_right = width * 0.46
     return Places(width * 0.32, estimate_right, estimate_right + look.px(12), strip, strip_width, False)
+
+
+class ColumnHead(QWidget):
+    """Names the column of intervals above the rows, so that no interval stands without its level."""
+
+    def __init__(self, look: Look) -> None:
+        super().__init__()
+        self._look = look
+        self._words = ""
+        self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
+        look.changed.connect(self._on_look_changed)
+
+    def show_words(self, words: str) -> None:
+        """Show the head, or nothing."""
+        self.setVisible(bool(words))
+        if words != self._words:
+            self._words = words
+            self.setAccessibleName(words)
+            self.update()
+
+    def sizeHint(self) -> QSize:
+        return QSize(self._look.px(100), self._look.px(18))
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        painter = QPainter(self)
+        x = places(self._look, self.width()).interval
+        draw_text(painter, x, 0, self.width() - x, self._words, self._look.font("small"), self._look.palette.muted)
+        painter.end()
+
+    def _on_look_changed(self) -> None:
+        self.updateGeometry()
+        self.update()
 
 
 class MeasureRow(QWidget):
@@ -114,13 +146,13 @@ class MeasureRow(QWidget):
 
     def paintEvent(self, event: QPaintEvent) -> None:
         painter = QPainter(self)
-        painter.fillRect(0, 0, self.width(), 1, self._look.colour("hairline"))
+        if self.hasFocus():
+            painter.fillRect(self.rect(), self._look.colour("tint"))
+            painter.fillRect(0, 0, self.width(), 2, self._look.colour("accent"))
+        else:
+            painter.fillRect(0, 0, self.width(), 1, self._look.colour("hairline"))
         if self._line:
             self._run(painter, self._line, self.width())
-        if self.hasFocus():
-            painter.setBrush(Qt.BrushStyle.NoBrush)
-            painter.setPen(QPen(self._look.colour("accent"), 1, Qt.PenStyle.DotLine))
-            painter.drawRect(self.rect().adjusted(0, 2, -1, -2))
         painter.end()
 
     def _height(self, width: int) -> int:

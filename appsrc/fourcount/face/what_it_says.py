@@ -21,7 +21,7 @@ if TYPE_CHECKING:
     from PySide6.QtGui import QAction
 
     from fourcount.appraisal.findings import OutcomeFindings
-    from fourcount.face.measure_row import MeasureRow
+    from fourcount.face.measure_row import ColumnHead, MeasureRow
     from fourcount.picture.scales import Scale
     from fourcount.wording.lines import MeasureLine
 
@@ -31,7 +31,7 @@ class WhatItSays(QWidget):
 
     **Signals**
         family_chosen: a family of intervals was chosen. Carries its key.
-        level_chosen: a level was chosen. Carries its fraction as text, or "other".
+        level_chosen: a level was chosen. Carries its fraction as text.
     """
 
     family_chosen = Signal(str)
@@ -42,6 +42,7 @@ class WhatItSays(QWidget):
         self._look = look
         self._rows: dict[str, MeasureRow] = {}
         self._order: Sequence[str] = ()
+        self._head: ColumnHead | None = None
         self._open = ""
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self._show_more = False
@@ -55,7 +56,7 @@ class WhatItSays(QWidget):
         self.level = ChoiceField(
             look,
             "Confidence level",
-            (*labels.LEVELS.items(), ("other", labels.OTHER_LEVEL)),
+            tuple(labels.LEVELS.items()),
             prefix=labels.LEVEL_PREFIX,
             plain=True,
         )
@@ -96,7 +97,8 @@ class WhatItSays(QWidget):
         if self.level.findData(key) < 0:
             from fourcount.wording import numbers
 
-            self.level.insertItem(self.level.count() - 1, numbers.level(choices.level), key)
+            place = sum(float(self.level.itemData(i)) < choices.level for i in range(self.level.count()))
+            self.level.insertItem(place, numbers.level(choices.level), key)
         self.level.show_choice(key)
 
     def _show_rows(self) -> None:
@@ -134,15 +136,23 @@ class WhatItSays(QWidget):
             row.show_line(line, scale, axis, line.key == self._open)
             row.show()
         self._put_in_order([line.key for line in lines])
+        if self._head and self._shown:
+            from fourcount.wording import numbers
+
+            level = numbers.level(self._shown[2].level)
+            self._head.show_words(labels.INTERVAL_HEAD.format(level=level) if len(lines) > 1 else "")
         self._show_working(shown)
 
     def _row(self, key: str) -> MeasureRow:
-        from fourcount.face.measure_row import MeasureRow
+        from fourcount.face.measure_row import ColumnHead, MeasureRow
 
         if key not in self._rows:
             row = MeasureRow(self._look, key)
             row.toggled.connect(self._on_row_toggled)
             self._rows[key] = row
+            if not self._measures.count():
+                self._head = ColumnHead(self._look)
+                self._measures.addWidget(self._head)
             self._measures.addWidget(row)
         return self._rows[key]
 
@@ -155,7 +165,7 @@ class WhatItSays(QWidget):
         for place, key in enumerate(keys):
             row = self._rows[key]
             self._measures.removeWidget(row)
-            self._measures.insertWidget(place, row)
+            self._measures.insertWidget(place + 1, row)
             QWidget.setTabOrder(before, row)
             before = row
         QWidget.setTabOrder(before, self.family)

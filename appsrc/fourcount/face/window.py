@@ -33,6 +33,7 @@ if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
 
 FIRST_SIZE = QSize(1280, 800)
+ROOM_FOR_A_FRAME = QSize(0, 40)
 SMALLEST_SIZE = QSize(480, 360)
 
 
@@ -73,7 +74,7 @@ class MainWindow(QMainWindow):
     def _build(self) -> None:
         self.setWindowTitle("Fourcount")
         self.setMinimumSize(SMALLEST_SIZE)
-        self.resize(FIRST_SIZE)
+        self.resize(FIRST_SIZE.boundedTo(self.screen().availableSize() - ROOM_FOR_A_FRAME))
         self.menus = commands_table.fill_menus(self, self.actions_by_key)
         self._appearances = self._appearance_actions()
         inside = QWidget()
@@ -108,7 +109,8 @@ class MainWindow(QMainWindow):
         """Cells in reading order right after the words above them."""
         grid, printed, says, patient = self.printed.grid, self.printed, self.says, self.patient
         order: list[QWidget] = [
-            self.header.title, self.header.source, printed.design, printed.event_words, printed.welcome, printed.span,
+            self.header.title, self.header.source, printed.design, printed.name, printed.welcome,
+            printed.event_words, printed.span,
             printed.form, printed.layout_choice, grid.headings["left"], grid.headings["right"], grid.labels["first"],
             grid.labels["second"], *grid.cells.values(), *printed.links, printed.example, says.sentence,
             says.family, says.level, says.more, says.help, *says.copies, patient.baseline,
@@ -139,13 +141,16 @@ class MainWindow(QMainWindow):
         self._later.arrived.connect(self._on_figures_arrived)
         self._later.loaded.connect(self._on_libraries_loaded)
         self.look.changed.connect(self._on_look_changed)
+        application = QApplication.instance()
+        if isinstance(application, QApplication):
+            application.focusChanged.connect(self._on_focus_changed)
         self.first_painted.connect(self._on_first_painted)
         self._appearances.triggered.connect(self._on_appearance_chosen)
         handlers = {
             "new": do.new_table, "example": do.open_example, "quit": self.close, "undo": self.session.undo,
             "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
             "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
-            "form": do.change_form, "layout": do.change_layout, "clear": do.clear_counts,
+            "form": do.change_form, "level": do.ask_level, "layout": do.change_layout, "clear": do.clear_counts,
             "first-cell": self._on_first_cell, "baseline": self._on_baseline, "bigger": self._on_bigger,
             "smaller": self._on_smaller, "actual": self._on_actual, "bars": self._on_bars,
             "more": self._on_more, "methods": self._on_methods,
@@ -295,8 +300,11 @@ class MainWindow(QMainWindow):
         self.update()
         QTimer.singleShot(0, self._show_focus)
 
+    def _on_focus_changed(self, _before: QWidget | None, _now: QWidget | None) -> None:
+        self._show_focus()
+
     def _show_focus(self) -> None:
-        """Bring what has the focus into view after everything has found its new place."""
+        """Bring what has the focus into view."""
         focus = self.focusWidget()
         if focus and self.page.isAncestorOf(focus):
             self.page_scroll.ensureWidgetVisible(focus)

@@ -8,14 +8,14 @@ FIELDS = {
     "title_text": "Title of the paper",
     "source_text": "Where the numbers stand",
     "design": "Study",
-    "left_words_text": "Event",
-    "right_words_text": "Event",
+    "name_text": "Outcome",
+    "left_words_text": "People who",
     "welcome": "Event is welcome or not",
     "span_text": "Time span",
     "form": "Printed as",
     "layout": "Groups run",
     "starting_risk_text": "Starting risk",
-    "starting_risk_source_text": "Source of the starting risk",
+    "starting_risk_source_text": "Its source",
     "effect": "Effect used",
 }
 """Names of the fields, on screen and for a screen reader."""
@@ -23,9 +23,10 @@ FIELDS = {
 HINTS = {
     "title_text": "Title of the paper",
     "source_text": "table, page or figure · no patient details",
+    "name_text": "“falls”",
     "words": "“fell at least once”",
     "span_text": "“12 months”",
-    "starting_risk_source_text": "source · no patient data",
+    "starting_risk_source_text": "a register, an audit · no patient details",
     "label": "group name",
     "left_heading": "event",
     "right_heading": "no event",
@@ -52,7 +53,6 @@ FAMILIES = {"score": "score", "textbook": "textbook", "exact": "exact"}
 EFFECTS = {"risk_ratio": "risk ratio", "odds_ratio": "odds ratio"}
 EFFECT_KEPT = "{effect} {value}, kept constant"
 LEVELS = {"0.8": "80%", "0.9": "90%", "0.95": "95%", "0.98": "98%", "0.99": "99%", "0.999": "99.9%"}
-OTHER_LEVEL = "another…"
 INTERVALS_PREFIX = "Intervals: "
 LEVEL_PREFIX = "Level: "
 
@@ -66,6 +66,7 @@ CELL_NAMES = {
     "right": "{group}, all people",
 }
 
+INTERVAL_HEAD = "{level} interval"
 FIRST_STEP = "New here? See an invented example"
 PATIENT_WAITS = "The picture appears once the four counts are there."
 BASELINE_HINT = "{percent}"
@@ -91,7 +92,8 @@ COMMANDS = {
     "clear": "C&lear the counts",
     "first-cell": "&Go to the first count",
     "baseline": "Go to the starting &risk",
-    "bigger": "&Larger text",
+    "level": "Another confidence le&vel…",
+    "bigger": "La&rger text",
     "smaller": "S&maller text",
     "actual": "&Normal text size",
     "bars": "&Bars instead of people",
