@@ -66,7 +66,29 @@ def test_the_event_falls_back_on_what_else_was_typed(outcome_of):
     """The words, else the heading in quotes, else a stand-in."""
     assert names.event_words(outcome_of()) == "fell at least once"
     assert names.event_words(outcome_of(left_words_text="")) == "had the event “fell”"
-    assert names.event_words(outcome_of(left_words_text="", left_heading_text="")) == "had the event"
+    nothing = dict.fromkeys(("left_words_text", "left_heading_text", "right_words_text", "right_heading_text"), "")
+    assert names.event_words(outcome_of(**nothing)) == "had the event"
+    assert names.event_words(outcome_of(left_words_text="", left_heading_text="Was moved")) == "Was moved"
+
+
+@pytest.mark.parametrize(
+    ("counted", "left", "right", "event", "other"),
+    [
+        ("left", "", "", "had the event", "did not have the event"),
+        ("right", "", "", "did not have the event", "had the event"),
+        ("left", "fell", "", "fell", "did not"),
+        ("right", "fell", "", "did not have the outcome “fell”", "fell"),
+        ("left", "", "healed", "did not have the outcome “healed”", "healed"),
+        ("right", "", "healed", "healed", "did not"),
+    ],
+)
+def test_a_column_without_a_name_keeps_its_own_words(outcome_of, counted, left, right, event, other):
+    """Counting the other outcome changes what is counted, never what an unnamed column is called."""
+    headings = {"left_heading_text": "", "right_heading_text": ""}
+    outcome = outcome_of(counted=counted, left_words_text=left, right_words_text=right, **headings)
+    assert (names.event_words(outcome), names.other_words(outcome)) == (event, other)
+    assert names.event_key(outcome) == event
+    assert names.other_key(outcome) == (f"did not have the outcome “{event}”" if other == "did not" else other)
 
 
 def test_the_other_outcome_follows_what_is_counted(outcome_of):

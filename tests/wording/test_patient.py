@@ -2,14 +2,17 @@
 
 from __future__ import annotations
 
+import re
+
 import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
 from fourcount.record.outcome import Outcome, Patient
-from fourcount.record.paper import Record
+from fourcount.record.paper import Choices, Record
 from fourcount.wording.example import worked_example
 from fourcount.wording.patient import DO_NOT_ADD_UP, patient_words, picture_heading
+from fourcount.wording.sentence import headline
 
 
 def words_of(outcome, findings_of, denominator=100):
@@ -159,3 +162,40 @@ def test_the_change_is_the_counts_own_or_is_said_not_to_add_up(outcome_of, findi
     change = words.summary_bold.split(" ")[0].replace(",", "")
     said = 0 if change == "The" else int(change)
     assert (said == abs(with_ - without)) != (DO_NOT_ADD_UP in words.detail)
+
+
+COLUMNS_OF_WORDS = {
+    "had the event": "left",
+    "did not have the event": "right",
+    "leftish": "left",
+    "did not have the outcome “leftish”": "right",
+    "rightish": "right",
+    "did not have the outcome “rightish”": "left",
+}
+
+
+@given(
+    st.sampled_from(("", "leftish")),
+    st.sampled_from(("", "rightish")),
+    st.sampled_from(("left", "right")),
+    st.booleans(),
+    st.tuples(*[st.integers(min_value=1, max_value=400)] * 4),
+)
+def test_headline_and_patient_speak_of_the_same_people(outcome_of, findings_of, left, right, counted, welcome, counts):
+    """Whatever is named, each number stands beside the words of the column that it was counted from."""
+    headings = {"left_heading_text": "", "right_heading_text": ""}
+    outcome = outcome_of(
+        counts, left_words_text=left, right_words_text=right, counted=counted, left_welcome=welcome, **headings
+    )
+    findings = findings_of(outcome)
+    words = patient_words(outcome, findings, 1_000)
+    event = re.search(r"about [\d,]+ (.*?) within", headline(outcome, findings, Choices()))[1]
+    assert COLUMNS_OF_WORDS[event] == counted
+    drawn = "right" if welcome else "left"
+    assert COLUMNS_OF_WORDS[words.key_event] == drawn
+    assert COLUMNS_OF_WORDS[words.key_other] != drawn
+    first = re.match(r"Of 1,000 people with usual care ([\d,]+) \(.*?\) (.*?) within", words.picture_sentence)
+    n, said = first.groups()
+    assert COLUMNS_OF_WORDS[said] == drawn
+    share = counts[2 if drawn == "left" else 3] / (counts[2] + counts[3])
+    assert int(n) == pytest.approx(1_000 * share, abs=0.51)

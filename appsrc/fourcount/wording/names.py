@@ -4,14 +4,20 @@ from __future__ import annotations
 
 from typing import Literal
 
-from fourcount.record.outcome import Outcome
+from fourcount.record.editing import count_other_outcome
+from fourcount.record.outcome import Column, Outcome
 
 Group = Literal["index", "reference"]
 
 STAND_INS = {"index": "index group", "reference": "reference group"}
 EVENT_STAND_IN = "had the event"
-OTHER_STAND_IN = "did not have the event"
+COLUMN_STAND_INS: dict[Column, str] = {"left": EVENT_STAND_IN, "right": "did not have the event"}
+"""What an unnamed column says, whichever of the two is counted: print puts the events left (common practice)."""
+
+NAMED_EVENT = "had the event “{heading}”"
 WITHOUT = "did not have the outcome “{outcome}”"
+DID_NOT = "did not"
+VERBS = ("did", "had", "was", "were", "got")  # a heading that begins so is a sentence's words already
 PREPOSITIONS = ("within", "in", "at", "over", "after", "by", "during")
 
 
@@ -55,37 +61,43 @@ def in_group(outcome: Outcome, group: Group) -> str:
 
 def event_words(outcome: Outcome) -> str:
     """The counted event as the reader's sentence says it: "fell at least once"."""
-    words = outcome.event_words_text.strip()
-    heading = outcome.event_heading_text.strip()
-    if words or heading:
-        return words or f"{EVENT_STAND_IN} “{heading}”"
-    other = outcome.other_words_text.strip() or outcome.other_heading_text.strip()
-    return WITHOUT.format(outcome=other) if other else EVENT_STAND_IN
+    words, heading = outcome.event_words_text.strip(), outcome.event_heading_text.strip()
+    if words or not heading:
+        return words or _unnamed_event(outcome)
+    return heading if heading.split(" ", 1)[0].lower() in VERBS else NAMED_EVENT.format(heading=heading)
 
 
 def other_words(outcome: Outcome) -> str:
-    """The other outcome as a sentence says it: "did not fall"."""
-    named = outcome.other_words_text.strip() or outcome.other_heading_text.strip()
-    if named:
-        return named
-    return "did not" if outcome.event_words_text.strip() else OTHER_STAND_IN
-
-
-def other_words_alone(outcome: Outcome) -> str:
-    """The other outcome where it is the one that is counted, and a bare "did not" would say nothing."""
-    named = outcome.other_words_text.strip() or outcome.other_heading_text.strip()
-    event = outcome.event_words_text.strip() or outcome.event_heading_text.strip()
-    return named or (WITHOUT.format(outcome=event) if event else OTHER_STAND_IN)
+    """The other outcome beside the counted one: "did not fall", or a bare "did not" where only the event is named."""
+    return _other_name(outcome) or (DID_NOT if _event_name(outcome) else COLUMN_STAND_INS[_other_column(outcome)])
 
 
 def event_key(outcome: Outcome) -> str:
     """The counted event in a picture's key."""
-    return outcome.event_heading_text.strip() or outcome.event_words_text.strip() or EVENT_STAND_IN
+    return outcome.event_heading_text.strip() or outcome.event_words_text.strip() or _unnamed_event(outcome)
 
 
 def other_key(outcome: Outcome) -> str:
-    """The other outcome in a picture's key."""
-    return outcome.other_heading_text.strip() or outcome.other_words_text.strip() or OTHER_STAND_IN
+    """The other outcome in a picture's key, where a bare "did not" would say nothing."""
+    return event_key(count_other_outcome(outcome))
+
+
+def _unnamed_event(outcome: Outcome) -> str:
+    """The counted column without a name: as the lack of the other one if that is named, else by its place."""
+    other = _other_name(outcome)
+    return WITHOUT.format(outcome=other) if other else COLUMN_STAND_INS[outcome.counted]
+
+
+def _event_name(outcome: Outcome) -> str:
+    return outcome.event_words_text.strip() or outcome.event_heading_text.strip()
+
+
+def _other_name(outcome: Outcome) -> str:
+    return outcome.other_words_text.strip() or outcome.other_heading_text.strip()
+
+
+def _other_column(outcome: Outcome) -> Column:
+    return "right" if outcome.counted == "left" else "left"
 
 
 def within_span(outcome: Outcome) -> str:

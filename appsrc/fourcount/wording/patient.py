@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 from dataclasses import dataclass
-from typing import NamedTuple
 
 from fourcount.appraisal.drawn import other_side
 from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings, PatientFindings
@@ -51,24 +50,6 @@ class PatientWords:
     picture_sentence: str = ""
 
 
-class Said(NamedTuple):
-    """What the drawn outcome and the one beside it are called, in sentences and in the key."""
-
-    event: str
-    other: str
-    event_key: str
-    other_key: str
-
-
-def _said(named: Outcome) -> Said:
-    """The words for what is drawn: those of the counted event, or of the other outcome where the event is welcome."""
-    if not named.welcome:
-        return Said(names.event_words(named), names.other_words(named), names.event_key(named), names.other_key(named))
-    return Said(
-        names.other_words_alone(named), names.event_words(named), names.other_key(named), names.event_key(named)
-    )
-
-
 def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int | None) -> PatientWords:
     """All words at the patient's starting risk; ``denominator`` is the picture's, None where none can be drawn."""
     patient = findings.patient
@@ -78,7 +59,7 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         return PatientWords(
             without_title=without_title, with_title=with_title, detail=gap_text(patient), missing=missing(outcome)
         )
-    named, said = outcome, _said(outcome)
+    named = outcome
     outcome, patient = drawn(outcome, patient)
     people = denominator or _text_only_denominator(patient)
     change = patient.difference.estimate
@@ -89,18 +70,18 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         without_percent=_percent(patient.without, people),
         with_count=_count(patient.with_, people),
         with_percent=_percent(patient.with_, people),
-        without_other=_others(patient.without, people, said),
-        with_other=_others(patient.with_, people, said),
-        key_event=said.event_key,
+        without_other=_others(patient.without, people, outcome),
+        with_other=_others(patient.with_, people, outcome),
+        key_event=names.event_key(outcome),
         key_avoided=_key("avoided", named) if not isinstance(change, Gap) and change < 0 else "",
         key_added=_key("added", named) if not isinstance(change, Gap) and change > 0 else "",
-        key_other=said.other_key,
-        summary_bold=_change_said(said, patient.difference, people),
+        key_other=names.other_key(outcome),
+        summary_bold=_change_said(outcome, patient.difference, people),
         summary=_summary(outcome, patient, people),
         detail=_detail(named, patient, people),
         scale="" if isinstance(change, Gap) else _scale(named, denominator),
-        missing=missing(outcome),
-        picture_sentence=_picture_sentence(outcome, said, patient, people),
+        missing=missing(named),
+        picture_sentence=_picture_sentence(outcome, patient, people),
     )
 
 
@@ -163,7 +144,7 @@ def _percent(figure: Figure, people: int) -> str:
     return f"{numbers.fixed_percent(risk, len(str(people)) - 3)}%"
 
 
-def _others(figure: Figure, people: int, said: Said) -> str:
+def _others(figure: Figure, people: int, outcome: Outcome) -> str:
     """The other frame: ``88 did not fall``. It is what the rounded count leaves, so that the two make the whole."""
     if isinstance(figure.estimate, Gap):
         return ""
@@ -174,7 +155,7 @@ def _others(figure: Figure, people: int, said: Said) -> str:
         left = "under 1"
     else:
         left = numbers.whole(people - n)
-    return f"{left} {said.other}"
+    return f"{left} {names.other_words(outcome)}"
 
 
 def _key(verb: str, outcome: Outcome) -> str:
@@ -192,10 +173,10 @@ def _change(difference: Figure, people: int) -> str:
     return f"{_size(change, people)} {limits.side(change)} in {numbers.whole(people)}"
 
 
-def _change_said(said: Said, difference: Figure, people: int) -> str:
+def _change_said(outcome: Outcome, difference: Figure, people: int) -> str:
     """``6 fewer in 100 fell at least once``."""
     change = _change(difference, people)
-    return f"{change} {said.event}" if change else ""
+    return f"{change} {names.event_words(outcome)}" if change else ""
 
 
 def _size(change: float, people: int) -> str:
@@ -284,19 +265,20 @@ def _scale(named: Outcome, denominator: int | None) -> str:
     return " ".join(parts)
 
 
-def _picture_sentence(outcome: Outcome, said: Said, patient: PatientFindings, people: int) -> str:
+def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -> str:
     """The whole picture in one sentence: both groups, both frames, the change and its range."""
     all_people, span = numbers.whole(people), names.within_span(outcome)
+    event = names.event_words(outcome)
     first = (
         f"Of {all_people} people {names.in_group(outcome, 'reference')} {_affected(patient.without, people)} "
-        f"{said.event}{f' {span}' if span else ''} and {_others(patient.without, people, said)}"
+        f"{event}{f' {span}' if span else ''} and {_others(patient.without, people, outcome)}"
     )
     if isinstance(patient.with_.estimate, Gap):
         reason = _reason(patient.with_.estimate, patient)
         return f"{first}. {names.sentence_case(names.in_group(outcome, 'index'))}: {reason}"
     second = (
         f"of {all_people} {names.in_group(outcome, 'index')} {_affected(patient.with_, people)} "
-        f"{said.event} and {_others(patient.with_, people, said)}"
+        f"{event} and {_others(patient.with_, people, outcome)}"
     )
     interval = _range(patient, people)
     change = _change(patient.difference, people)
