@@ -102,14 +102,17 @@ class Commands(QObject):
 
     def copy_text(self) -> None:
         """Copy the findings as text."""
+        self._session.settle()
         self._tell("copy-text", clipboard.copy_text(self._session))
 
     def copy_table(self) -> None:
         """Copy the findings as a table."""
+        self._session.settle()
         self._tell("copy-table", clipboard.copy_table(self._session))
 
     def copy_picture(self) -> None:
         """Copy the picture of the patient as people, or as bars where it is drawn so."""
+        self._session.settle()
         picture = self.picture.picture if self.picture else None
         self._tell("copy-picture", clipboard.copy_picture(self._session, picture, self._style))
 

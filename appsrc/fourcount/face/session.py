@@ -111,6 +111,14 @@ class Session(QObject):
             self.findings = appraise(self.outcome, self.record.choices, deferring=True)
         self.changed.emit(self.record, self.findings)
 
+    def settle(self) -> None:
+        """Compute at once whatever was to follow: what is copied holds every figure."""
+        from fourcount.appraisal.appraise import appraise
+        from fourcount.appraisal.waiting import waits
+
+        if self.findings is not None and waits(self.findings):
+            self.take_findings(self.outcome, appraise(self.outcome, self.record.choices))
+
     def take_findings(self, outcome: Outcome, findings: OutcomeFindings) -> None:
         """Take figures that followed later, unless the table has changed meanwhile."""
         if outcome == self.outcome:

@@ -52,6 +52,7 @@ def main() -> None:
         window.session.changed.connect(watch.on_changed)
     else:
         window._later.loaded.connect(_done)
+    window.resize(1280, 800)  # as the bare window, whatever the screen
     window.show()
     sys.exit(application.exec())
 
