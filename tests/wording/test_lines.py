@@ -6,7 +6,7 @@ import math
 
 import pytest
 
-from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, NumberNeededLimit
+from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, NumberNeededLimit, Range
 from fourcount.record.outcome import EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import Choices
 from fourcount.wording import limits
@@ -166,6 +166,20 @@ def test_a_figure_that_follows_says_so(outcome_of, findings_of):
 def test_each_limit_of_a_difference_has_the_word_it_needs(low, high, estimate, text):
     """Both words where the interval holds no effect (Cochrane Handbook 5.1, 12.5.4.5)."""
     assert limits.difference_interval(Interval(low=low, high=high), estimate) == text
+
+
+@pytest.mark.parametrize(
+    ("low", "high", "estimate", "text"),
+    [
+        (0.02, Gap("beyond-one"), 0.05, "2.0 to no limit"),
+        (-0.02, Gap("beyond-one"), -0.01, "2.0 fewer to no limit"),
+        (Gap("beyond-one"), 0.02, 0.01, "no limit to 2.0 more"),
+        (Gap("beyond-one"), -0.02, -0.05, "2.0 to no limit"),
+    ],
+)
+def test_a_limit_beyond_everybody_is_on_its_own_side_of_no_effect(low, high, estimate, text):
+    """A range that is open at its upper end and starts at fewer holds no effect, whatever its estimate."""
+    assert limits.difference_interval(Range(low=low, high=high), estimate) == text
 
 
 @pytest.mark.parametrize(

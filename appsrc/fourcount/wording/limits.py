@@ -61,7 +61,8 @@ def sided(interval: AnyInterval, estimate: float | Gap, write: Callable[[float],
     if isinstance(interval, Gap):
         return ""
     low, high = interval.low, interval.high
-    ends = [x for x in (low, high) if not isinstance(x, Gap)]
+    # A withheld limit lies beyond all risks: below no effect if it is the lower one, above it if the upper one.
+    ends = (-1.0 if isinstance(low, Gap) else low, 1.0 if isinstance(high, Gap) else high)
     if not isinstance(estimate, Gap) and estimate and all(x * estimate >= 0 for x in ends):
         first, second = (low, high) if estimate > 0 else (high, low)
         return f"{_limit(first, write)}{numbers.TO}{_limit(second, write)}"
