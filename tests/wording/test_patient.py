@@ -124,10 +124,48 @@ def test_of_a_welcome_event_the_other_outcome_is_drawn(outcome_of, findings_of):
     assert (words.without_count, words.with_count) == ("83 in 100", "91 in 100")
     assert (words.key_event, words.key_other) == ("did not fall", "fell")
     assert (words.key_avoided, words.key_added) == ("", "added, on balance")
-    assert words.summary_bold == "8 more in 100 did not fall"
-    assert words.scale == "The figures counted here are those with the unwelcome outcome."
+    assert (words.without_percent, words.with_percent) == ("83% did not fall", "91% did not fall")
+    assert words.summary_bold == "8 fewer in 100 fell at least once"
+    assert words.summary == "over 12 months, range 3 to 13"
+    assert words.picture_sentence.endswith(
+        "91 (91%) did not fall and 9 fell at least once: 8 fewer in 100 fell at least once, range 3 to 13. "
+        "We cannot say which people."
+    )
+    assert words.scale == "Drawn: people with the unwelcome outcome."
     assert words.detail.startswith("NNTH at this starting risk 13")
     assert "The welcome outcome itself is, in relative words, 46% lower" in words.detail
+
+
+def test_a_welcome_event_alone_has_to_be_named(outcome_of, findings_of):
+    """The other outcome's words follow from it."""
+    named = {"left_heading_text": "", "right_heading_text": "", "right_words_text": "", "left_words_text": "healed"}
+    words = words_of(outcome_of((60, 40, 51, 49), left_welcome=True, **named), findings_of)
+    assert words.missing == ()
+    assert words.summary_bold == "9 more in 100 healed"
+    assert (words.without_percent, words.without_other) == ("49% did not have the outcome “healed”", "51 healed")
+
+
+@pytest.mark.parametrize("welcome", [True, False])
+@pytest.mark.parametrize("turned", [True, False])
+@pytest.mark.parametrize("effect", ["risk_ratio", "odds_ratio"])
+def test_summary_range_and_caution_look_the_same_way(outcome_of, findings_of, welcome, turned, effect):
+    """The side on which a range reaches further is named in the terms of the range beside it."""
+    for counts in ((10, 90, 12, 88), (52, 48, 50, 50), (90, 10, 88, 12)):
+        for risk in ("12%", "50%", "95%"):
+            outcome = outcome_of(
+                counts, left_welcome=welcome, counted="right" if turned else "left", patient=at(risk, effect)
+            )
+            leaning = [caution for caution in findings_of(outcome).cautions if caution.key == "leans"]
+            words = words_of(outcome, findings_of, 10_000)
+            ends = re.search(r"range (?:([\d,]+) fewer) to (?:([\d,]+) more|no limit)$", words.summary)
+            side = re.match(r"[\d,]+ (fewer|more) ", words.summary_bold)
+            if side is None or ends is None:
+                assert not leaning
+                continue
+            fewer, more = (int((end or "99999").replace(",", "")) for end in ends.groups())
+            further = "fewer" if fewer > more else "more"
+            assert (leaning != []) == (further != side[1])
+            assert all(caution.facts == {"side": further} for caution in leaning)
 
 
 def test_more_events_are_added(outcome_of, findings_of):
@@ -191,6 +229,7 @@ def test_headline_and_patient_speak_of_the_same_people(outcome_of, findings_of, 
     words = patient_words(outcome, findings, 1_000)
     event = re.search(r"about [\d,]+ (.*?) within", headline(outcome, findings, Choices()))[1]
     assert COLUMNS_OF_WORDS[event] == counted
+    assert words.summary_bold.endswith(f" {event}")
     drawn = "right" if welcome else "left"
     assert COLUMNS_OF_WORDS[words.key_event] == drawn
     assert COLUMNS_OF_WORDS[words.key_other] != drawn

@@ -139,7 +139,6 @@ def leans(case: Case) -> Facts | None:
         return None
     reaches_up = isinstance(interval.high, Gap) or interval.high > -interval.low
     reaches_down = not isinstance(interval.high, Gap) and interval.high < -interval.low
-    up, down = ("fewer", "more") if case.outcome.welcome else ("more", "fewer")  # as the picture counts
     if difference < 0 and reaches_up:
-        return {"side": up}
-    return {"side": down} if difference > 0 and reaches_down else None
+        return {"side": "more"}
+    return {"side": "fewer"} if difference > 0 and reaches_down else None

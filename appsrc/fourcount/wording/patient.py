@@ -16,7 +16,7 @@ from fourcount.wording.headline import choose
 LONGEST_KEY = 40
 NOT_GIVEN = "not given"
 TOO_SMALL = "too small to draw"
-UNWELCOME_DRAWN = "The figures counted here are those with the unwelcome outcome."
+UNWELCOME_DRAWN = "Drawn: people with the unwelcome outcome."
 WHICH_PEOPLE = "We cannot say which people."
 CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
 DO_NOT_ADD_UP = "Whole numbers are rounded, so they need not add up."
@@ -59,7 +59,7 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         return PatientWords(
             without_title=without_title, with_title=with_title, detail=gap_text(patient), missing=missing(outcome)
         )
-    named = outcome
+    named, own = outcome, patient
     outcome, patient = drawn(outcome, patient)
     people = denominator or _text_only_denominator(patient)
     change = patient.difference.estimate
@@ -67,21 +67,21 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         without_title=without_title,
         with_title=with_title,
         without_count=_count(patient.without, people),
-        without_percent=_percent(patient.without, people),
+        without_percent=_percent_said(patient.without, people, named),
         with_count=_count(patient.with_, people),
-        with_percent=_percent(patient.with_, people),
+        with_percent=_percent_said(patient.with_, people, named),
         without_other=_others(patient.without, people, outcome),
         with_other=_others(patient.with_, people, outcome),
         key_event=names.event_key(outcome),
         key_avoided=_key("avoided", named) if not isinstance(change, Gap) and change < 0 else "",
         key_added=_key("added", named) if not isinstance(change, Gap) and change > 0 else "",
         key_other=names.other_key(outcome),
-        summary_bold=_change_said(outcome, patient.difference, people),
-        summary=_summary(outcome, patient, people),
-        detail=_detail(named, patient, people),
+        summary_bold=_change_said(named, own.difference, people),
+        summary=_summary(named, own, people),
+        detail=_detail(named, own, people),
         scale="" if isinstance(change, Gap) else _scale(named, denominator),
         missing=missing(named),
-        picture_sentence=_picture_sentence(outcome, patient, people),
+        picture_sentence=f"{_picture_sentence(outcome, patient, people)}{_change_sentence(named, own, people)}",
     )
 
 
@@ -142,6 +142,12 @@ def _percent(figure: Figure, people: int) -> str:
     if (n == 0 and risk) or (n >= people and risk < 1):
         return numbers.percent_whole(risk)
     return f"{numbers.fixed_percent(risk, len(str(people)) - 3)}%"
+
+
+def _percent_said(figure: Figure, people: int, named: Outcome) -> str:
+    """The percentage; of a welcome event it says what it counts, since the sentence beside it counts the other side."""
+    percent = _percent(figure, people)
+    return f"{percent} {names.event_words(count_other_outcome(named))}" if percent and named.welcome else percent
 
 
 def _others(figure: Figure, people: int, outcome: Outcome) -> str:
@@ -206,8 +212,7 @@ def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
     sentences = [_number_needed(patient.number_needed), _relative(named, patient.risk_ratio)]
     sentences += [_reason(gap, patient) for gap in _gaps(patient.difference)]
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
-        typed = 1 - patient.baseline if named.welcome else patient.baseline
-        sentences.append(f"The range leaves out that {numbers.percent_given(typed)} is itself uncertain.")
+        sentences.append(f"The range leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
     if not _adds_up(patient, people):
         sentences.append(DO_NOT_ADD_UP)
     return " ".join(part for part in dict.fromkeys(sentences) if part)
@@ -266,7 +271,7 @@ def _scale(named: Outcome, denominator: int | None) -> str:
 
 
 def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -> str:
-    """The whole picture in one sentence: both groups, both frames, the change and its range."""
+    """What is drawn, in one sentence: both groups, both frames."""
     all_people, span = numbers.whole(people), names.within_span(outcome)
     event = names.event_words(outcome)
     first = (
@@ -280,10 +285,16 @@ def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -
         f"of {all_people} {names.in_group(outcome, 'index')} {_affected(patient.with_, people)} "
         f"{event} and {_others(patient.with_, people, outcome)}"
     )
-    interval = _range(patient, people)
-    change = _change(patient.difference, people)
-    change = change[:1].lower() + change[1:]
-    return f"{first}; {second}: {change}{f', range {interval}' if interval else ''}. {WHICH_PEOPLE}"
+    return f"{first}; {second}"
+
+
+def _change_sentence(named: Outcome, own: PatientFindings, people: int) -> str:
+    """How the picture's sentence ends: the change of the named outcome, and its range."""
+    if isinstance(own.with_.estimate, Gap):
+        return ""
+    change = _change_said(named, own.difference, people) if named.welcome else _change(own.difference, people)
+    interval = _range(own, people)
+    return f": {change[:1].lower()}{change[1:]}{f', range {interval}' if interval else ''}. {WHICH_PEOPLE}"
 
 
 def _affected(figure: Figure, people: int) -> str:
