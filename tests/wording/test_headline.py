@@ -11,6 +11,7 @@ from hypothesis import strategies as st
 from fourcount.record.outcome import EventsAndOthers
 from fourcount.record.paper import Choices
 from fourcount.wording import numbers
+from fourcount.wording.patient import patient_words
 from fourcount.wording.sentence import headline
 
 cells = st.integers(min_value=0, max_value=10**9) | st.integers(min_value=0, max_value=60)
@@ -25,7 +26,7 @@ def test_the_headline_reads_as_a_sentence_about_people(outcome_of, findings_of):
     outcome = outcome_of(left_words_text="fell")
     assert headline(outcome, findings_of(outcome), Choices()) == (
         "Of 100 people with usual care about 17 fell within 12 months; of 100 with night lights about 9. "
-        "That is 8 fewer, and could be as few as 3 or as many as 13."
+        "That is 8 fewer, and could be as few as 3 or as many as 13 (95% interval)."
     )
 
 
@@ -34,8 +35,19 @@ def test_through_no_effect_both_sides_are_said(outcome_of, findings_of):
     outcome = outcome_of((12, 88, 10, 90))
     text = headline(outcome, findings_of(outcome), Choices())
     assert text.endswith(
-        "That is 2 more, and could be anything from 7 fewer to 11 more: compatible with fewer and with more."
+        "That is 2 more, and could be anything from 7 fewer to 11 more (95% interval): compatible with fewer and "
+        "with more."
     )
+
+
+def test_the_interval_says_its_level(outcome_of, findings_of):
+    """Another level is another interval, in the headline and in the patient's sentences."""
+    outcome, choices = outcome_of((12, 88, 10, 90)), Choices(level=0.9)
+    findings = findings_of(outcome, choices)
+    assert "(90% interval)" in headline(outcome, findings, choices)
+    words = patient_words(outcome, findings, choices, 100)
+    assert words.summary.startswith("over 12 months, 90% interval ")
+    assert ", 90% interval " in words.picture_sentence
 
 
 def test_equal_risks_are_said_to_be_equal(outcome_of, findings_of):
@@ -43,7 +55,8 @@ def test_equal_risks_are_said_to_be_equal(outcome_of, findings_of):
     outcome = outcome_of((10, 90, 10, 90))
     assert headline(outcome, findings_of(outcome), Choices()) == (
         "Of 100 people with usual care about 10 fell at least once within 12 months; of 100 with night lights also "
-        "about 10. The difference could be anything from 9 fewer to 9 more: compatible with fewer and with more."
+        "about 10. The difference could be anything from 9 fewer to 9 more (95% interval): compatible with fewer and "
+        "with more."
     )
 
 

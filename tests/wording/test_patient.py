@@ -16,7 +16,7 @@ from fourcount.wording.sentence import headline
 
 
 def words_of(outcome, findings_of, denominator=100):
-    return patient_words(outcome, findings_of(outcome), denominator)
+    return patient_words(outcome, findings_of(outcome), Choices(), denominator)
 
 
 def at(starting_risk, effect="risk_ratio"):
@@ -36,15 +36,18 @@ def test_the_example_at_twelve_per_cent(outcome_of, findings_of):
         "",
         "did not fall",
     )
-    assert (words.summary_bold, words.summary) == ("6 fewer in 100 fell at least once", "over 12 months, range 3 to 8")
+    assert (words.summary_bold, words.summary) == (
+        "6 fewer in 100 fell at least once",
+        "over 12 months, 95% interval 3 to 8",
+    )
     assert words.detail == (
         "NNTB at this starting risk 19 (14 to 38). In relative words 46% lower (22% to 63%). "
-        "The range leaves out that 12% is itself uncertain."
+        "The interval leaves out that 12% is itself uncertain."
     )
     assert words.missing == ()
     assert words.picture_sentence == (
         "Of 100 people with usual care 12 (12%) fell at least once within 12 months and 88 did not fall; of 100 with "
-        "night lights 6 (6%) fell at least once and 94 did not fall: 6 fewer in 100, range 3 to 8. "
+        "night lights 6 (6%) fell at least once and 94 did not fall: 6 fewer in 100, 95% interval 3 to 8. "
         "We cannot say which people."
     )
 
@@ -99,7 +102,7 @@ def test_a_limit_beyond_everybody_leaves_the_estimate(outcome_of, findings_of):
     """The range says that it has no upper limit, and why."""
     words = words_of(outcome_of(patient=at("45%"), index_group="second"), findings_of)
     assert words.with_count == "84 in 100"
-    assert words.summary == "over 12 months, range 13 to no limit"
+    assert words.summary == "over 12 months, 95% interval 13 to no limit"
     assert "The risk would pass 100% here" in words.detail
 
 
@@ -126,9 +129,9 @@ def test_of_a_welcome_event_the_other_outcome_is_drawn(outcome_of, findings_of):
     assert (words.key_avoided, words.key_added) == ("", "added, on balance")
     assert (words.without_percent, words.with_percent) == ("83% did not fall", "91% did not fall")
     assert words.summary_bold == "8 fewer in 100 fell at least once"
-    assert words.summary == "over 12 months, range 3 to 13"
+    assert words.summary == "over 12 months, 95% interval 3 to 13"
     assert words.picture_sentence.endswith(
-        "91 (91%) did not fall and 9 fell at least once: 8 fewer in 100 fell at least once, range 3 to 13. "
+        "91 (91%) did not fall and 9 fell at least once: 8 fewer in 100 fell at least once, 95% interval 3 to 13. "
         "We cannot say which people."
     )
     assert words.scale == "Drawn: people with the unwelcome outcome."
@@ -157,7 +160,7 @@ def test_summary_range_and_caution_look_the_same_way(outcome_of, findings_of, we
             )
             leaning = [caution for caution in findings_of(outcome).cautions if caution.key == "leans"]
             words = words_of(outcome, findings_of, 10_000)
-            ends = re.search(r"range (?:([\d,]+) fewer) to (?:([\d,]+) more|no limit)$", words.summary)
+            ends = re.search(r"interval (?:([\d,]+) fewer) to (?:([\d,]+) more|no limit)$", words.summary)
             side = re.match(r"[\d,]+ (fewer|more) ", words.summary_bold)
             if side is None or ends is None:
                 assert not leaning
@@ -189,7 +192,7 @@ def test_equal_risks_have_no_key_and_a_range(outcome_of, findings_of):
     words = words_of(outcome_of((10, 90, 10, 90)), findings_of)
     assert (words.key_avoided, words.key_added) == ("", "")
     assert words.summary_bold == "The same number in 100 fell at least once"
-    assert words.summary == "over 12 months, range 9 fewer to 9 more"
+    assert words.summary == "over 12 months, 95% interval 9 fewer to 9 more"
 
 
 @given(st.tuples(*[st.integers(min_value=1, max_value=500)] * 4))
@@ -226,7 +229,7 @@ def test_headline_and_patient_speak_of_the_same_people(outcome_of, findings_of, 
         counts, left_words_text=left, right_words_text=right, counted=counted, left_welcome=welcome, **headings
     )
     findings = findings_of(outcome)
-    words = patient_words(outcome, findings, 1_000)
+    words = patient_words(outcome, findings, Choices(), 1_000)
     event = re.search(r"about [\d,]+ (.*?) within", headline(outcome, findings, Choices()))[1]
     assert COLUMNS_OF_WORDS[event] == counted
     assert words.summary_bold.endswith(f" {event}")

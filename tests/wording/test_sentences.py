@@ -61,7 +61,7 @@ def all_texts(outcome, findings, choices, *, with_working):
         yield from (caution_text(caution), caution_title(caution))
     yield from (mark_text(mark) for mark in findings.marks)
     for denominator in (100, 10_000, None):
-        words = patient_words(outcome, findings, denominator)
+        words = patient_words(outcome, findings, choices, denominator)
         for name in words.__slots__:
             value = getattr(words, name)
             yield from (value if isinstance(value, tuple) else (value,))

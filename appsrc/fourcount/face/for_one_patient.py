@@ -14,6 +14,7 @@ from fourcount.face.links import Link
 from fourcount.face.look import Look
 from fourcount.face.text import Words
 from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
 
 if TYPE_CHECKING:
@@ -85,7 +86,7 @@ class ForOnePatient(QWidget):
         super().__init__()
         self._look = look
         self._bars = False
-        self._shown: tuple[Outcome, OutcomeFindings] | None = None
+        self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self.baseline = TextField(look, "starting_risk_text", labels.FIELDS["starting_risk_text"], role="total")
         self.source = TextField(
             look,
@@ -103,16 +104,16 @@ class ForOnePatient(QWidget):
         self._build()
         self._connect_all()
 
-    def show_state(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
+    def show_state(self, record: Record, outcome: Outcome, findings: OutcomeFindings | None) -> None:
         """Show the patient's fields; with findings, the picture and its sentences."""
         self.baseline.show_text(outcome.patient.starting_risk_text)
         self.source.show_text(outcome.patient.starting_risk_source_text)
         self.effect.show_choice(outcome.patient.effect)
-        self._shown = (outcome, findings) if findings else None
+        self._shown = (outcome, findings, record.choices) if findings else None
         if findings is None:
             self.baseline.setPlaceholderText("")
             return
-        self._show_findings(outcome, findings)
+        self._show_findings(outcome, findings, record.choices)
 
     def set_bars(self, bars: bool) -> None:
         """Draw a bar pair instead of people, or people again."""
@@ -120,10 +121,10 @@ class ForOnePatient(QWidget):
         if self._shown:
             self._show_findings(*self._shown)
 
-    def _show_findings(self, outcome: Outcome, findings: OutcomeFindings) -> None:
+    def _show_findings(self, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> None:
         from fourcount.face.patient_view import patient_view
 
-        view = patient_view(outcome, findings, self._bars)
+        view = patient_view(outcome, findings, choices, self._bars)
         self.baseline.setPlaceholderText(view.baseline_hint)
         self.effect.show_words(view.effect_words)
         self.effect.show_choice(view.effect)

@@ -9,6 +9,7 @@ from fourcount.ink.picture import KeyEntry, Picture, PictureWords, Side
 from fourcount.picture.plan import Plan, plan
 from fourcount.picture.scales import risk_scale
 from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
 from fourcount.wording import labels, numbers
 from fourcount.wording.axis import axis_words
 from fourcount.wording.gaps import gap_text, mark_text
@@ -32,7 +33,7 @@ class PatientView(NamedTuple):
     detail: str = ""
 
 
-def patient_view(outcome: Outcome, findings: OutcomeFindings, bars: bool) -> PatientView:
+def patient_view(outcome: Outcome, findings: OutcomeFindings, choices: Choices, bars: bool) -> PatientView:
     """The column for an outcome and its findings; ``bars`` asks for bars instead of people."""
     marks = {mark.field: mark_text(mark) for mark in findings.marks}
     view = PatientView(
@@ -46,14 +47,19 @@ def patient_view(outcome: Outcome, findings: OutcomeFindings, bars: bool) -> Pat
         return view._replace(waits=labels.PATIENT_WAITS)
     if isinstance(findings.patient, Gap):
         return view if view.mark else view._replace(waits=gap_text(findings.patient))
-    return _with_patient(view, outcome, findings, findings.patient, bars)
+    return _with_patient(view, outcome, findings, findings.patient, choices, bars)
 
 
 def _with_patient(
-    view: PatientView, outcome: Outcome, findings: OutcomeFindings, patient: PatientFindings, bars: bool
+    view: PatientView,
+    outcome: Outcome,
+    findings: OutcomeFindings,
+    patient: PatientFindings,
+    choices: Choices,
+    bars: bool,
 ) -> PatientView:
     drawn = _plan(outcome, patient)
-    words = patient_words(outcome, findings, drawn.denominator if drawn else None)
+    words = patient_words(outcome, findings, choices, drawn.denominator if drawn else None)
     missing = labels.MISSING.format(names=", ".join(words.missing)) if words.missing else ""
     range_words = f"{sentence_case(words.summary)}." if words.summary else ""
     detail = " ".join(part for part in (range_words, words.detail, WHICH_PEOPLE) if part)

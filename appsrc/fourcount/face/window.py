@@ -169,7 +169,7 @@ class MainWindow(QMainWindow):
         self.header.notice.show_words("")
         self.printed.show_state(outcome, from_session)
         self.says.show_state(record, outcome, from_session)
-        self.patient.show_state(outcome, from_session)
+        self.patient.show_state(record, outcome, from_session)
         self.cautions.show_state(from_session)
         self.actions_by_key["undo"].setEnabled(self.session.can_undo)
         self.actions_by_key["redo"].setEnabled(self.session.can_redo)

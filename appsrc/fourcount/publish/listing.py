@@ -32,7 +32,7 @@ def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
             _figures([line for line in lines if not line.withheld], choices),
             *_withheld([line for line in lines if line.withheld]),
             _wrapped(p_sentence(findings)),
-            _patient(outcome, findings),
+            _patient(outcome, findings, choices),
             _cautions(findings),
             _wrapped(STANDING),
         ]
@@ -65,12 +65,12 @@ def _withheld(lines: list[MeasureLine]) -> list[str]:
     return [_wrapped(f"{'; '.join(names)}: {reason}") for reason, names in reasons.items()]
 
 
-def _patient(outcome: Outcome, findings: OutcomeFindings) -> str:
+def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     """Only at a starting risk from elsewhere: at the study's own the rows above say the same."""
     patient = findings.patient
     if isinstance(patient, Gap) or patient.baseline_from == "reference":
         return ""
-    words = patient_words(outcome, findings, None)
+    words = patient_words(outcome, findings, choices, None)
     lines = (
         f"{words.without_title}, {words.without_percent or words.without_count}",
         f"{words.with_title}, {words.with_percent or words.with_count}",

@@ -30,7 +30,7 @@ def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, versio
     paragraphs = [
         one_line(_title(record, outcome)),
         *(one_line(paragraph) for paragraph in _study(outcome, findings, choices)),
-        one_line(_patient(outcome, findings)),
+        one_line(_patient(outcome, findings, choices)),
         _cautions(findings),
         one_line(" ".join(STANDING_FULL)),
         one_line(made),
@@ -74,10 +74,10 @@ def _counts(outcome: Outcome, findings: OutcomeFindings) -> str:
     )
 
 
-def _patient(outcome: Outcome, findings: OutcomeFindings) -> str:
+def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     if not isinstance(findings.patient, PatientFindings):
         return ""
-    words = patient_words(outcome, findings, None)
+    words = patient_words(outcome, findings, choices, None)
     return f"{labels.COLUMNS['patient']}: {words.picture_sentence} {words.detail}"
 
 

@@ -29,7 +29,7 @@ TEXTS = {
     ),
     "baseline-uncertain": (
         "The starting risk",
-        "The range leaves out that {baseline} is itself uncertain.",
+        "The interval leaves out that {baseline} is itself uncertain.",
     ),
     "rests-on-baseline": (
         "The starting risk",
@@ -77,9 +77,9 @@ TEXTS = {
         "With a harm in {risk} of people, one trial’s number of people and time are too small to show it reliably.",
     ),
     "leans": (
-        "No effect is inside the range",
+        "No effect is inside the interval",
         (
-            "The range at this starting risk includes no effect, and reaches further on the side of “{side}”, "
+            "The interval at this starting risk includes no effect, and reaches further on the side of “{side}”, "
             "away from the estimate."
         ),
     ),

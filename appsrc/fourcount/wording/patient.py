@@ -8,7 +8,7 @@ from fourcount.appraisal.drawn import other_side
 from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings, PatientFindings
 from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Outcome
-from fourcount.record.paper import Record
+from fourcount.record.paper import Choices, Record
 from fourcount.wording import limits, names, numbers
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import choose
@@ -50,7 +50,9 @@ class PatientWords:
     picture_sentence: str = ""
 
 
-def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int | None) -> PatientWords:
+def patient_words(
+    outcome: Outcome, findings: OutcomeFindings, choices: Choices, denominator: int | None
+) -> PatientWords:
     """All words at the patient's starting risk; ``denominator`` is the picture's, None where none can be drawn."""
     patient = findings.patient
     without_title = f"Without: {names.label_within(outcome, 'reference')}"
@@ -77,11 +79,11 @@ def patient_words(outcome: Outcome, findings: OutcomeFindings, denominator: int 
         key_added=_key("added", named) if not isinstance(change, Gap) and change > 0 else "",
         key_other=names.other_key(outcome),
         summary_bold=_change_said(named, own.difference, people),
-        summary=_summary(named, own, people),
+        summary=_summary(named, own, choices, people),
         detail=_detail(named, own, people),
         scale="" if isinstance(change, Gap) else _scale(named, denominator),
         missing=missing(named),
-        picture_sentence=f"{_picture_sentence(outcome, patient, people)}{_change_sentence(named, own, people)}",
+        picture_sentence=_picture_sentence(outcome, patient, people) + _change_sentence(named, own, choices, people),
     )
 
 
@@ -190,29 +192,31 @@ def _size(change: float, people: int) -> str:
     return "under 1" if n == 0 and change else numbers.whole(n)
 
 
-def _range(patient: PatientFindings, people: int) -> str:
+def _interval(patient: PatientFindings, choices: Choices, people: int) -> str:
+    """``95% interval 3 to 8``, or "" where there is none."""
+
     def write(x: float) -> str:
         return _size(x, people)
 
-    return limits.sided(patient.difference.interval, patient.difference.estimate, write)
+    interval = limits.sided(patient.difference.interval, patient.difference.estimate, write)
+    return f"{numbers.level(choices.level)} interval {interval}" if interval else ""
 
 
-def _summary(outcome: Outcome, patient: PatientFindings, people: int) -> str:
+def _summary(outcome: Outcome, patient: PatientFindings, choices: Choices, people: int) -> str:
     if isinstance(patient.difference.estimate, Gap):
         return ""
-    interval = _range(patient, people)
-    parts = (names.over_span(outcome), f"range {interval}" if interval else "")
+    parts = (names.over_span(outcome), _interval(patient, choices, people))
     return ", ".join(part for part in parts if part)
 
 
 def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
-    """What stands under the summary: number needed, relative words, and what the range leaves out."""
+    """What stands under the summary: number needed, relative words, and what the interval leaves out."""
     if isinstance(patient.with_.estimate, Gap):
         return _reason(patient.with_.estimate, patient)
     sentences = [_number_needed(patient.number_needed), _relative(named, patient.risk_ratio)]
     sentences += [_reason(gap, patient) for gap in _gaps(patient.difference)]
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
-        sentences.append(f"The range leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
+        sentences.append(f"The interval leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
     if not _adds_up(patient, people):
         sentences.append(DO_NOT_ADD_UP)
     return " ".join(part for part in dict.fromkeys(sentences) if part)
@@ -288,13 +292,13 @@ def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -
     return f"{first}; {second}"
 
 
-def _change_sentence(named: Outcome, own: PatientFindings, people: int) -> str:
-    """How the picture's sentence ends: the change of the named outcome, and its range."""
+def _change_sentence(named: Outcome, own: PatientFindings, choices: Choices, people: int) -> str:
+    """How the picture's sentence ends: the change of the named outcome, and its interval."""
     if isinstance(own.with_.estimate, Gap):
         return ""
     change = _change_said(named, own.difference, people) if named.welcome else _change(own.difference, people)
-    interval = _range(own, people)
-    return f": {change[:1].lower()}{change[1:]}{f', range {interval}' if interval else ''}. {WHICH_PEOPLE}"
+    interval = _interval(own, choices, people)
+    return f": {change[:1].lower()}{change[1:]}{f', {interval}' if interval else ''}. {WHICH_PEOPLE}"
 
 
 def _affected(figure: Figure, people: int) -> str:

@@ -38,7 +38,7 @@ def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
             return gap_text(gap)
         figures += [figure] if isinstance(figure, Figure) else []
     difference, reference, index = figures
-    return _people_headline(outcome, reference, index, difference)
+    return _people_headline(outcome, (reference, index, difference), choices)
 
 
 def measure_sentence(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
@@ -83,10 +83,11 @@ def _odds_headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices
     return measure_sentence("odds_ratio", outcome, findings, choices)
 
 
-def _people_headline(outcome: Outcome, reference: Figure, index: Figure, difference: Figure) -> str:
-    estimates = [figure.estimate for figure in (reference, index, difference)]
+def _people_headline(outcome: Outcome, figures: tuple[Figure, Figure, Figure], choices: Choices) -> str:
+    """The reference group's risk, the index group's and their difference, with the difference's interval."""
+    interval, estimates = figures[2].interval, [figure.estimate for figure in figures]
     risk_reference, risk_index, gap = (x for x in estimates if not isinstance(x, Gap))
-    people = choose(risk_reference, risk_index, gap, difference.interval)
+    people = choose(risk_reference, risk_index, gap, interval)
     of = f"Of {numbers.whole(people.denominator)} people {names.in_group(outcome, 'reference')}"
     first = f"{of} {_about(people.reference, people)} {names.event_words(outcome)}"
     span = names.within_span(outcome)
@@ -94,7 +95,7 @@ def _people_headline(outcome: Outcome, reference: Figure, index: Figure, differe
         f"of {numbers.whole(people.denominator)} {names.in_group(outcome, 'index')} "
         f"{'also ' if gap == 0 else ''}{_about(people.index, people)}"
     )
-    return f"{first}{f' {span}' if span else ''}; {second}. {_difference(gap, people, difference.interval)}"
+    return f"{first}{f' {span}' if span else ''}; {second}. {_difference(gap, people, interval, choices)}"
 
 
 def _about(n: int, people: People) -> str:
@@ -103,20 +104,20 @@ def _about(n: int, people: People) -> str:
     return f"about {numbers.whole(n)}"
 
 
-def _difference(difference: float, people: People, interval: Interval | Range | Gap) -> str:
+def _difference(difference: float, people: People, interval: Interval | Range | Gap, choices: Choices) -> str:
     """The difference and its interval in the same whole people."""
     said = f"That is {numbers.whole(people.difference)} {limits.side(difference)}"
     if isinstance(interval, Gap):
         return f"{said if difference else 'There is no interval'}. {gap_text(interval)}"
-    low, high = interval.low, interval.high
+    low, high, level = interval.low, interval.high, f"({numbers.level(choices.level)} interval)"
     if isinstance(low, Gap) or isinstance(high, Gap):
         return f"{said}."
     if low * difference > 0 and high * difference > 0:
         few, many = sorted((abs(low), abs(high)))
-        return f"{said}, and could be as few as {_size(few, people)} or as many as {_size(many, people)}."
+        return f"{said}, and could be as few as {_size(few, people)} or as many as {_size(many, people)} {level}."
     start = f"{said}, and could be" if difference else "The difference could be"
     both = f": {COMPATIBLE}" if low < 0 < high else ""
-    return f"{start} anything from {_sided(low, people)} to {_sided(high, people)}{both}."
+    return f"{start} anything from {_sided(low, people)} to {_sided(high, people)} {level}{both}."
 
 
 def _size(limit: float, people: People) -> str:
