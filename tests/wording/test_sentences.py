@@ -176,6 +176,18 @@ def test_the_p_value_names_its_test(outcome_of, findings_of):
     )
 
 
+@pytest.mark.parametrize("family", FAMILIES)
+def test_an_outcome_that_all_share_has_no_p(outcome_of, findings_of, family):
+    """Where nobody, or everybody, had the event there is nothing to test, and no p stands anywhere."""
+    none, everybody = (outcome_of(cells) for cells in ((0, 50, 0, 50), (50, 0, 50, 0)))
+    assert p_sentence(findings_of(none, Choices(family=family))) == (
+        "There is no p: nobody in either group had the event, so this figure is not determined."
+    )
+    assert p_sentence(findings_of(everybody, Choices(family=family))) == (
+        "There is no p: everybody in both groups had the event, so this figure is not determined."
+    )
+
+
 @given(st.floats(min_value=0, max_value=1), st.floats(min_value=0, max_value=1))
 def test_the_picture_and_the_words_take_the_same_denominator(without, with_):
     """Whatever the plan chooses, it is a number of people that the words know."""

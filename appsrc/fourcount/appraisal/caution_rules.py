@@ -99,13 +99,12 @@ def half_added(case: Case, *, measure: str) -> Facts | None:
 
 
 def through_no_effect(case: Case) -> Facts | None:
-    """The interval of the difference, or of the odds ratio where there is none, holds fewer and more."""
-    for measure in ("risk_difference", "odds_ratio"):
-        figure = case.figures.get(measure)
-        answer = None if figure is None else straddles(figure.interval, NO_EFFECT[measure])
-        if answer is not None:
-            return {} if answer else None
-    return None
+    """The interval of the headline holds fewer and more: the difference's, or in a case-control study the odds ratio's.
+
+    Where the difference has no interval, the headline says so, and no other one speaks for it.
+    """
+    measure = "risk_difference" if "risk_difference" in case.figures else "odds_ratio"
+    return {} if straddles(case.figures[measure].interval, NO_EFFECT[measure]) else None
 
 
 def family_parts(case: Case) -> Facts | None:

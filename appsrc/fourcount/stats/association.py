@@ -4,7 +4,7 @@ from __future__ import annotations
 
 import math
 
-from fourcount.stats.estimates import without_people
+from fourcount.stats.estimates import without_a_contrast
 from fourcount.stats.normal import two_sided_p
 from fourcount.stats.results import Counts, Gap
 
@@ -12,7 +12,7 @@ from fourcount.stats.results import Counts, Gap
 def pearson(counts: Counts) -> float | Gap:
     """Pearson's chi-square test: N (ad - bc)^2 / (n1 n2 m (N - m)), one degree of freedom.
 
-    Where everybody had the event, or nobody, the groups do not differ and p is 1. Source: Pearson 1900.
+    Where everybody had the event, or nobody, there is nothing to test: a gap. Source: Pearson 1900.
     """
     return _chi_square_p(counts, counts.total)
 
@@ -28,11 +28,9 @@ def n_minus_1(counts: Counts) -> float | Gap:
 
 
 def _chi_square_p(counts: Counts, weight: int) -> float | Gap:
-    gap = without_people(counts)
+    gap = without_a_contrast(counts)
     if gap is not None:
         return gap
-    if counts.events == 0 or counts.non_events == 0:
-        return 1.0
     across = counts.index_events * counts.reference_non_events - counts.index_non_events * counts.reference_events
     margins = counts.index_total * counts.reference_total * counts.events * counts.non_events
     return two_sided_p(math.sqrt(weight * across * across / margins))

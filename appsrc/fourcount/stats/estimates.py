@@ -21,6 +21,19 @@ def without_people(counts: Counts) -> Gap | None:
     return None
 
 
+def without_a_contrast(counts: Counts) -> Gap | None:
+    """The gap of a table in which a group or a column is empty; None where there is something to test.
+
+    Where nobody, or everybody, had the event, no other table has the same margins: a test would compare nothing.
+    """
+    gap = without_people(counts)
+    if gap is None and counts.events == 0:
+        return Gap("no-events")
+    if gap is None and counts.non_events == 0:
+        return Gap("no-non-events")
+    return gap
+
+
 def risk(events: int, total: int) -> float | Gap:
     """The fraction of a group that had the event."""
     return events / total if total else Gap("empty-group")
@@ -59,10 +72,8 @@ def risk_ratio(counts: Counts) -> float | Gap:
 
 def odds_ratio(counts: Counts) -> float | Gap:
     """The sample odds ratio ad/bc; ``inf`` where only bc is 0."""
-    gap = without_people(counts)
+    gap = without_a_contrast(counts)
     if gap is not None:
         return gap
-    if counts.events == 0 or counts.non_events == 0:
-        return Gap("no-events" if counts.events == 0 else "no-non-events")
     across = counts.index_non_events * counts.reference_events
     return (counts.index_events * counts.reference_non_events) / across if across else math.inf

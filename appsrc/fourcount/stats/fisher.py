@@ -3,8 +3,9 @@
 All margins are held fixed. Two-sided: the sum over all tables whose probability is at most that of the observed one
 times 1 + 1e-7, so that tables tied with it count in spite of rounding (common practice). Sources: R. A. Fisher
 (1935) J R Stat Soc 98:39; mid-P: Lancaster HO (1961) J Am Stat Assoc 56:223, Lydersen S, Fagerland MW, Laake P
-(2009) Stat Med 28:1159. Where no event, or nothing but events, was seen, only one table is possible and p is
-1 (mid-P 1/2). A p below the smallest double is 0.
+(2009) Stat Med 28:1159. Where no event, or nothing but events, was seen, only one table is possible: its p
+would be 1 and its mid-P 1/2 by definition, whatever the groups, so that neither tests anything, and both are gaps. A p
+below the smallest double is 0.
 """
 
 from __future__ import annotations
@@ -12,7 +13,7 @@ from __future__ import annotations
 import math
 
 from fourcount.stats.central import log_probability, moved, tail
-from fourcount.stats.estimates import without_people
+from fourcount.stats.estimates import without_a_contrast
 from fourcount.stats.hypergeometric import support
 from fourcount.stats.results import Counts, Gap
 
@@ -21,22 +22,22 @@ _TIE = math.log1p(1e-7)
 
 def fisher(counts: Counts) -> float | Gap:
     """Fisher's two-sided p."""
-    return without_people(counts) or min(1.0, _unlikely(counts))
+    return without_a_contrast(counts) or min(1.0, _unlikely(counts))
 
 
 def fisher_mid_p(counts: Counts) -> float | Gap:
     """Fisher's two-sided p less half the observed table's own probability; tables tied with it count in full."""
-    return without_people(counts) or min(1.0, _unlikely(counts)) - math.exp(log_probability(counts)) / 2
+    return without_a_contrast(counts) or min(1.0, _unlikely(counts)) - math.exp(log_probability(counts)) / 2
 
 
 def fisher_greater(counts: Counts) -> float | Gap:
     """One-sided: the probability of as many index events, or more."""
-    return without_people(counts) or _beyond(counts, 1)
+    return without_a_contrast(counts) or _beyond(counts, 1)
 
 
 def fisher_less(counts: Counts) -> float | Gap:
     """One-sided: the probability of as many index events, or fewer."""
-    return without_people(counts) or _beyond(counts, -1)
+    return without_a_contrast(counts) or _beyond(counts, -1)
 
 
 def _beyond(counts: Counts, away: int) -> float:

@@ -12,6 +12,8 @@ from fourcount.wording.headline import People, choose
 
 COMPATIBLE = "compatible with fewer and with more"
 UNDER_ONE = "under 1"
+NO_P = "There is no p: "
+P_FOLLOWS = "The p value takes a moment and will follow."
 MEANINGS = {
     "risk_difference": meanings.difference,
     "risk_reference": meanings.risk_reference,
@@ -64,11 +66,16 @@ def p_sentence(findings: OutcomeFindings) -> str:
     if isinstance(probability, Gap):
         return gap_text(probability)
     if isinstance(probability.p, Gap):
-        return f"The p value is not given. {gap_text(probability.p)}"
+        return P_FOLLOWS if probability.p.key == "follows" else f"{NO_P}{_clause(gap_text(probability.p))}"
     return (
         f"{numbers.p_phrase(probability.p)} by the {test(probability.method).title} test of no association, two-sided. "
         "It does not say how large the effect is; the intervals do."
     )
+
+
+def _clause(sentence: str) -> str:
+    """A sentence that goes on behind a colon."""
+    return sentence[:1].lower() + sentence[1:]
 
 
 def p_line(findings: OutcomeFindings) -> lines.MeasureLine:

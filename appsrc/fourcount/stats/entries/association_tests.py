@@ -44,7 +44,7 @@ ASSOCIATION_TESTS = (
         title="Pearson chi-square",
         formula="N(ad − bc)² / (n1 n2 m (N−m)), one degree of freedom, no continuity correction",
         source="Pearson 1900",
-        note="Where everybody had the event, or nobody, p is 1.",
+        note="Where everybody had the event, or nobody, there is nothing to test.",
         p=association.pearson,
     ),
     Test(
@@ -54,7 +54,7 @@ ASSOCIATION_TESTS = (
         source="Pearson 1947; Campbell 2007, Stat Med 26:3661",
         note=(
             "Agrees with the Miettinen–Nurminen intervals about no effect. "
-            "Where everybody had the event, or nobody, p is 1."
+            "Where everybody had the event, or nobody, there is nothing to test."
         ),
         p=association.n_minus_1,
     ),
