@@ -121,10 +121,21 @@ def test_a_given_starting_risk_is_in_every_export() -> None:
     outcome = outcome_of((38, 374, 70, 339), risk="12%")
     assert "For one patient" in letter(outcome)
     assert "For one patient" in on_screen(outcome)
-    assert sum(row[0].startswith("For one patient, 12%") for row in table_of(outcome)) == 4
+    assert sum(row[0].startswith("For one patient, 12%") for row in table_of(outcome) if row[1]) == 4
     assert any(row[0] == "For one patient, 12%: NNTB" for row in table_of(outcome))
     assert not any(row[0].startswith("For one patient") for row in table_of(OUTCOME))
     assert "For one patient" not in on_screen(OUTCOME)
+
+
+def test_every_copy_says_what_the_patients_figures_rest_on() -> None:
+    """The starting risk, its source and the effect carried to it are in the letter, the sheet and the listing."""
+    patient = Patient(starting_risk_text="12%", starting_risk_source_text="ward audit 2025")
+    outcome = msgspec.structs.replace(OUTCOME, patient=patient)
+    rests = "Starting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant."
+    assert rests in letter(outcome)
+    assert rests in " ".join(on_screen(outcome).split())
+    assert sum(rests in row[0] for row in table_of(outcome)) == 1
+    assert "At the study’s own starting risk." in letter(OUTCOME)
 
 
 def test_long_names_leave_the_figures_in_their_columns() -> None:

@@ -61,6 +61,27 @@ def test_the_studys_own_risk_has_the_tables_range(outcome_of, findings_of):
 
 
 @pytest.mark.parametrize(
+    ("changes", "basis"),
+    [
+        ({}, "At the study’s own starting risk."),
+        ({"design": "survey"}, "At the study’s own starting prevalence."),
+        ({"patient": at("12%")}, "Starting risk 12%, risk ratio 0.54 (0.37 to 0.78) kept constant."),
+        (
+            {"patient": at("12%", "odds_ratio"), "design": "case-control"},
+            "Starting risk 12%, odds ratio 0.49 (0.32 to 0.75) kept constant.",
+        ),
+        (
+            {"patient": at("12%"), "design": "survey"},
+            "Starting risk 12%, prevalence ratio 0.54 (0.37 to 0.78) kept constant.",
+        ),
+    ],
+)
+def test_the_figures_say_what_they_rest_on(outcome_of, findings_of, changes, basis):
+    """The starting risk and the effect carried to it, by the name that the design gives it."""
+    assert words_of(outcome_of(**changes), findings_of).basis == basis
+
+
+@pytest.mark.parametrize(
     ("denominator", "count", "percent", "other"),
     [
         (100, "under 1 in 100", "0.3%", "over 99 did not fall"),

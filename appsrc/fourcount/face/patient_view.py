@@ -63,12 +63,12 @@ def _with_patient(
     missing = labels.MISSING.format(names=", ".join(words.missing)) if words.missing else ""
     range_words = f"{sentence_case(words.summary)}." if words.summary else ""
     detail = " ".join(part for part in (range_words, words.detail, WHICH_PEOPLE) if part)
-    lines = (words.summary_bold, detail)
+    lines = (words.basis, words.summary_bold, detail)
     picture = Picture(drawn, _picture_words(words, lines, drawn), bars) if drawn else None
     return view._replace(
         picture=picture,
         sentence=words.picture_sentence,
-        summary=lines[0],
+        summary=words.summary_bold,
         detail="\n".join(part for part in (detail, missing) if part),
     )
 

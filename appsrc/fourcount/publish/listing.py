@@ -72,6 +72,7 @@ def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
         return ""
     words = patient_words(outcome, findings, choices, None)
     lines = (
+        words.basis,
         f"{words.without_title}, {words.without_percent or words.without_count}",
         f"{words.with_title}, {words.with_percent or words.with_count}",
         ", ".join(part for part in (words.summary_bold, words.summary) if part),

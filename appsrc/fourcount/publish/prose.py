@@ -78,7 +78,7 @@ def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
     if not isinstance(findings.patient, PatientFindings):
         return ""
     words = patient_words(outcome, findings, choices, None)
-    return f"{labels.COLUMNS['patient']}: {words.picture_sentence} {words.detail}"
+    return f"{labels.COLUMNS['patient']}: {words.basis} {words.picture_sentence} {words.detail}"
 
 
 def _cautions(findings: OutcomeFindings) -> str:

@@ -19,6 +19,7 @@ from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import labels, lines, names, numbers
+from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.gaps import gap_text
 
@@ -51,7 +52,7 @@ def rows(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple
         *(_measure(line.name, findings.measures[line.key]) for line in lines.measure_lines(outcome, findings, choices)),
         _p(findings),
         *_converted(findings.conversion),
-        *_patient(findings.patient),
+        *_patient(outcome, findings.patient),
         *(_text(caution) for caution in cautions),
         _text(UNROUNDED.format(level=numbers.level(choices.level))),
         *(_text(sentence) for sentence in STANDING_FULL),
@@ -132,7 +133,7 @@ def _converted(conversion: Conversion | Gap) -> tuple[Row, ...]:
     return (_figure(CONVERTED.format(baseline=baseline), conversion.risk_ratio),)
 
 
-def _patient(patient: PatientFindings | Gap) -> tuple[Row, ...]:
+def _patient(outcome: Outcome, patient: PatientFindings | Gap) -> tuple[Row, ...]:
     """Only at a starting risk from elsewhere: at the study's own the rows above say the same."""
     if isinstance(patient, Gap) or patient.baseline_from == "reference":
         return ()
@@ -144,6 +145,7 @@ def _patient(patient: PatientFindings | Gap) -> tuple[Row, ...]:
         return PATIENT.format(column=labels.COLUMNS["patient"], baseline=baseline, name=name)
 
     return (
+        _text(named(basis(outcome, patient))),
         _figure(named("risk with"), patient.with_),
         _figure(named("difference"), patient.difference),
         _measure(named(kind), needed),

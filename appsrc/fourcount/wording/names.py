@@ -5,7 +5,7 @@ from __future__ import annotations
 from typing import Literal
 
 from fourcount.record.editing import count_other_outcome
-from fourcount.record.outcome import Column, Outcome
+from fourcount.record.outcome import Column, Effect, Outcome
 
 Group = Literal["index", "reference"]
 
@@ -121,3 +121,8 @@ def _begins_with_preposition(span: str) -> bool:
 def risk_name(outcome: Outcome) -> str:
     """What a proportion of people is called: a survey finds a prevalence, not a risk."""
     return "prevalence" if outcome.design == "survey" else "risk"
+
+
+def effect_name(outcome: Outcome, effect: Effect) -> str:
+    """What an effect is called in this design: in a survey the ratio of two prevalences."""
+    return "odds ratio" if effect == "odds_ratio" else f"{risk_name(outcome)} ratio"

@@ -10,6 +10,7 @@ from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import limits, names, numbers
+from fourcount.wording.basis import basis
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import choose
 
@@ -27,6 +28,7 @@ class PatientWords:
     """Every text of the patient's column and picture; "" where there is nothing to say.
 
     ``missing`` names what the reader has not named yet, without which no patient is shown a picture.
+    ``basis`` says what starting risk and what effect everything rests on.
     ``scale`` says that the picture shows more than 100 people, or that it is too small to draw.
     """
 
@@ -45,6 +47,7 @@ class PatientWords:
     summary_bold: str = ""
     summary: str = ""
     detail: str = ""
+    basis: str = ""
     scale: str = ""
     missing: tuple[str, ...] = ()
     picture_sentence: str = ""
@@ -81,6 +84,7 @@ def patient_words(
         summary_bold=_change_said(named, own.difference, people),
         summary=_summary(named, own, choices, people),
         detail=_detail(named, own, people),
+        basis=basis(named, own),
         scale="" if isinstance(change, Gap) else _scale(named, denominator),
         missing=missing(named),
         picture_sentence=_picture_sentence(outcome, patient, people) + _change_sentence(named, own, choices, people),

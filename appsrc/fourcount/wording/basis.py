@@ -1,0 +1,25 @@
+"""What a patient's figures rest on: the starting risk, where it is from, and the effect carried to it."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Gap, PatientFindings
+from fourcount.record.outcome import Outcome
+from fourcount.wording import limits, names, numbers
+
+OWN_RISK = "At the study’s own starting {risk}."
+GIVEN_RISK = "Starting risk {baseline}{source}, {effect} {value}{interval} kept constant."
+
+
+def basis(outcome: Outcome, patient: PatientFindings) -> str:
+    """One sentence without which nobody who gets a copy can check it."""
+    carried = patient.carried
+    if patient.baseline_from == "reference" or isinstance(carried.estimate, Gap):
+        return OWN_RISK.format(risk=names.risk_name(outcome))
+    source = " ".join(outcome.patient.starting_risk_source_text.split())
+    return GIVEN_RISK.format(
+        baseline=numbers.percent_given(patient.baseline),
+        source=f" ({source})" if source else "",
+        effect=names.effect_name(outcome, patient.effect),
+        value=numbers.ratio(carried.estimate),
+        interval=limits.bracketed(limits.ratio_interval(carried.interval, carried.estimate)),
+    )
