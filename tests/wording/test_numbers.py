@@ -22,22 +22,31 @@ ratios = st.floats(min_value=1e-6, max_value=1e9)
         (1.0, "100.0%"),
         (38 / 412, "9.2%"),
         (70 / 409, "17.1%"),
-        (9 / 2000, "0.5%"),  # 0.45 goes up although the float lies below it
-        (0.0125, "1.3%"),
+        (9 / 2000, "0.45%"),
+        (0.0125, "1.3%"),  # goes up although the float lies below it
+        (9 / 12000, "0.075%"),
+        (3 / 12000, "0.025%"),
+        (0.0025, "0.25%"),
+        (0.005, "0.50%"),
+        (0.00996, "1.0%"),
+        (0.00994, "0.99%"),
         (0.0004, "0.040%"),
         (0.00049, "0.049%"),
-        (0.0005, "0.1%"),
+        (0.0005, "0.050%"),
         (0.000001, "0.00010%"),
         (1e-9, "<0.0001%"),
-        (0.9994, "99.9%"),
+        (0.9994, "99.94%"),
+        (0.99925, "99.93%"),
+        (0.995, "99.50%"),
+        (0.9899, "99.0%"),
         (0.9995, "99.95%"),
         (0.9997, "99.97%"),
         (0.9999999, ">99.9999%"),
         (-0.019, "−1.9%"),  # a Wald limit
     ],
 )
-def test_a_percentage_has_one_decimal_and_more_only_where_it_would_be_nobody_or_all(fraction, text):
-    """9.2%, no space, half-up; never 0.0% for somebody nor 100.0% for nearly all."""
+def test_a_percentage_has_one_decimal_and_more_where_its_smaller_side_is_small(fraction, text):
+    """9.2%, no space, half-up; two digits of a small risk; never 0.0% for somebody nor 100.0% for nearly all."""
     assert numbers.percent(fraction) == text
 
 
@@ -137,6 +146,10 @@ def test_a_number_needed_is_rounded_up_but_not_by_a_floats_noise(value, text):
     [
         (-0.0789, "7.9", "79"),
         (0.0, "0.0", "0"),
+        (-0.0005, "0.050", "0.50"),
+        (0.005, "0.50", "5.0"),
+        (0.00994, "0.99", "9.9"),
+        (0.00996, "1.0", "10"),
         (0.000004, "0.00040", "0.0040"),
         (0.0004, "0.040", "0.40"),
         (1e-9, "<0.0001", "<0.001"),
@@ -159,6 +172,8 @@ def test_a_difference_is_a_size_per_100_and_per_1000(difference, hundred, thousa
         (1.0, "100%", "100%"),
         (0.1, "10%", "10%"),
         (0.995, "99.5%", "99.5%"),
+        (0.00075, "0.075%", "0.08%"),
+        (1e-9, "<0.0001%", "<0.0001%"),
     ],
 )
 def test_a_typed_risk_keeps_its_digits_and_a_patients_is_whole(fraction, given_text, whole_text):
@@ -179,6 +194,57 @@ def test_rounding_is_half_up_as_decimal_has_it(x, decimals):
     """Against the standard library's decimal on the float's fifteen digits."""
     exact = Decimal(f"{x:.14e}").quantize(Decimal(1).scaleb(-decimals), rounding=ROUND_HALF_UP)
     assert numbers.fixed(x, decimals) == f"{exact:.{decimals}f}"
+
+
+@pytest.mark.parametrize(
+    ("limit", "estimate", "text"),
+    [
+        (0.006, 0.092, "0.6%"),
+        (0.0004, 0.092, "0.040%"),
+        (0.000395, 0.00075, "0.040%"),
+        (0.00143, 0.00075, "0.143%"),
+        (0.0038, 0.0, "0.38%"),
+        (0.9962, 1.0, "99.62%"),
+        (0.9997, 0.9, "99.97%"),
+        (0.17091, 0.17115, "17.09%"),  # would print as 17.1% too
+        (0.17141, 0.17115, "17.14%"),
+        (0.17181, 0.17161, "17.2%"),  # 17.18% would look smaller than the 17.2% that it is above
+        (0.17119, 0.17115, "17.12%"),
+        (0.17115, 0.17115, "17.1%"),
+    ],
+)
+def test_a_limit_of_a_risk_has_the_decimals_of_its_estimate(limit, estimate, text):
+    """More where it would say nobody or all, and one more where it would look like the estimate and need not."""
+    assert numbers.percent_limit(limit, estimate) == text
+
+
+@pytest.mark.parametrize(
+    ("limit", "estimate", "text"),
+    [
+        (-0.00109, -0.0005, "0.109"),
+        (0.000078, -0.0005, "0.008"),
+        (0.000078, -0.05, "0.0078"),
+        (0.006, 0.05, "0.6"),
+        (0.0004, 0.0, "0.040"),
+        (-0.07862, -0.07891, "7.86"),
+        (0.07862, -0.07891, "7.9"),  # its word tells it apart
+    ],
+)
+def test_a_limit_of_a_difference_has_the_decimals_of_its_estimate(limit, estimate, text):
+    """More where it would say no effect, and one more where it would look like the estimate and need not."""
+    assert numbers.hundred_limit(limit, estimate) == text
+
+
+@given(fractions, fractions)
+def test_no_limit_looks_as_if_it_were_on_the_other_side_of_its_estimate(limit, estimate):
+    """Printed, a limit is never above an estimate that it is below."""
+    shown, beside = (
+        float(text.strip("<>%")) for text in (numbers.percent_limit(limit, estimate), numbers.percent(estimate))
+    )
+    if limit < estimate:
+        assert shown <= beside
+    if limit > estimate:
+        assert shown >= beside
 
 
 @given(fractions)

@@ -1,8 +1,12 @@
 """Numbers to digits: the one place where anything is rounded.
 
 Halves go up. What is rounded is the float's first fifteen significant digits, those it holds for
-certain, so that 9/2000 is 0.45% and rounds to 0.5%, whatever its binary tail says. Nothing that differs
+certain, so that 0.0125 is 1.25% and rounds to 1.3%, whatever its binary tail says. Nothing that differs
 from no effect, from 0 or from everybody is ever printed as if it did not: it takes more digits instead.
+
+Percentages and differences per 100 have one decimal, and two significant digits where that is more
+(0.075%): small risks differ by what one decimal would hide. A limit has its estimate's decimals, and one
+more where it would otherwise look like the estimate and need not.
 """
 
 from __future__ import annotations
@@ -14,9 +18,9 @@ MINUS = "−"
 TO = " to "
 
 PERCENT_DECIMALS = 1
-HUNDRED_DECIMALS = 1
 RATIO_DECIMALS = 2
-SMALL_FIGURES = 2  # significant digits of what would otherwise round to nothing
+SMALL_FIGURES = 2  # significant digits at least of a small risk or difference
+NEARLY_ALL_DECIMALS = 2  # of a percentage above 99
 MOST_DECIMALS = 12
 SMALLEST_PERCENT = 0.000001  # as a fraction: 0.0001%, below which only "less than that" is printed
 SMALLEST_RATIO = 0.000001
@@ -39,7 +43,7 @@ def people(risk: float, denominator: int) -> int:
 
 
 def percent(fraction: float) -> str:
-    """A study's percentage: one decimal, no space before the sign."""
+    """A study's percentage: one decimal, two significant digits under 1%, two decimals above 99%, no space."""
     return percent_limit(fraction, fraction)
 
 
@@ -49,22 +53,24 @@ def percent_limit(fraction: float, estimate: float, sign: str = "%") -> str:
         return f"<{_written(1, 4, negative=False)}{sign}"
     if 1 - SMALLEST_PERCENT < fraction < 1:
         return f">{_written(999_999, 4, negative=False)}{sign}"
-    return f"{fixed_percent(fraction, max(_percent_decimals(estimate), _percent_decimals(fraction)))}{sign}"
+    own = fraction if estimate in (0.0, 1.0) else estimate  # nobody and everybody have no digits to go by
+    decimals = _kept_from_ends(fraction, _percent_decimals(own))
+    return f"{fixed_percent(fraction, _apart_from_estimate(fraction, estimate, decimals))}{sign}"
 
 
 def percent_given(fraction: float) -> str:
-    """A risk as somebody typed it, 12% or 12.5%: two decimals at most, no trailing zeros."""
-    decimals = _percent_decimals(fraction, at_least=2)
-    text = fixed_percent(fraction, decimals)
-    return f"{text.rstrip('0').rstrip('.') if decimals else text}%"
+    """A risk as somebody typed it, 12% or 12.5%: two decimals, two significant digits, no trailing zeros."""
+    if 0 < fraction < SMALLEST_PERCENT:
+        return percent_limit(fraction, fraction)
+    decimals = max(2, _percent_decimals(fraction))
+    return f"{fixed_percent(fraction, decimals).rstrip('0').rstrip('.')}%"
 
 
 def percent_whole(fraction: float) -> str:
     """A whole percentage for patients and for relative effects, with more digits only where it would say 0% or 100%."""
     if 0 < fraction < SMALLEST_PERCENT:
         return percent_limit(fraction, fraction)
-    decimals = _percent_decimals(fraction, at_least=0, figures=1)
-    return f"{fixed_percent(fraction, decimals)}%"
+    return f"{fixed_percent(fraction, _kept_from_ends(fraction, 0, figures=1))}%"
 
 
 def fixed_percent(fraction: float, decimals: int) -> str:
@@ -73,7 +79,7 @@ def fixed_percent(fraction: float, decimals: int) -> str:
 
 
 def hundred(difference: float) -> str:
-    """The size of a risk difference per 100 people: one decimal, more where that would print 0.0."""
+    """The size of a risk difference per 100 people: one decimal, two significant digits where that is more."""
     return hundred_limit(difference, difference)
 
 
@@ -82,16 +88,18 @@ def hundred_limit(difference: float, estimate: float) -> str:
     size = abs(difference)
     if 0 < size < SMALLEST_PERCENT:
         return f"<{_written(1, 4, negative=False)}"
-    decimals = max(_hundred_decimals(abs(estimate)), _hundred_decimals(size))
-    return fixed_percent(size, decimals)
+    decimals = _small_decimals(abs(estimate) or size)
+    if size and _scaled(size, decimals + 2) == 0:
+        decimals = _small_decimals(size)
+    return fixed_percent(size, _apart_from_estimate(difference, estimate, decimals))
 
 
 def thousand(difference: float) -> str:
-    """The size of a difference per 1,000 people: whole, with more digits where that would print 0."""
+    """The size of a difference per 1,000 people: whole from 10 up, else two significant digits."""
     size = abs(difference)
     if 0 < size < SMALLEST_PERCENT:
         return f"<{_written(1, 3, negative=False)}"
-    decimals = 0 if _scaled(size, 3) or not size else _significant_decimals(size, SMALL_FIGURES) - 3
+    decimals = max(0, _significant_decimals(size, SMALL_FIGURES) - 3) if size else 0
     return _written(_scaled(size, decimals + 3), decimals, negative=False)
 
 
@@ -183,21 +191,43 @@ def _significant_decimals(x: float, figures: int) -> int:
     return decimals - 1 if _scaled(x, decimals) == 10**figures else decimals
 
 
-def _percent_decimals(fraction: float, at_least: int = PERCENT_DECIMALS, figures: int = SMALL_FIGURES) -> int:
-    """Decimals of a percentage: more where somebody would become nobody, or nearly all would become all."""
-    shown = _scaled(fraction, at_least + 2)
+def _percent_decimals(fraction: float) -> int:
+    """Decimals of a study's percentage, by the smaller of its two sides."""
+    left = 1 - fraction
+    if left >= 0.01 or left < SMALLEST_PERCENT:
+        return _small_decimals(abs(fraction))
+    return max(
+        PERCENT_DECIMALS,
+        min(NEARLY_ALL_DECIMALS, _significant_decimals(left, SMALL_FIGURES) - 2),
+        _significant_decimals(left, 1) - 2,
+    )
+
+
+def _small_decimals(size: float) -> int:
+    """Decimals of a share or a difference in hundredths: one, and two significant digits where that is more."""
+    if size < SMALLEST_PERCENT:
+        return PERCENT_DECIMALS
+    return max(PERCENT_DECIMALS, _significant_decimals(size, SMALL_FIGURES) - 2)
+
+
+def _kept_from_ends(fraction: float, decimals: int, figures: int = SMALL_FIGURES) -> int:
+    """More decimals of a percentage where somebody would become nobody, or nearly all would become all."""
+    shown = _scaled(fraction, decimals + 2)
     if shown == 0 and abs(fraction) >= SMALLEST_PERCENT:
         return _significant_decimals(fraction, figures) - 2
-    if shown == 10 ** (at_least + 2) and abs(1 - fraction) >= SMALLEST_PERCENT:
+    if shown == 10 ** (decimals + 2) and abs(1 - fraction) >= SMALLEST_PERCENT:
         return _significant_decimals(1 - fraction, 1) - 2
-    return at_least
+    return decimals
 
 
-def _hundred_decimals(size: float) -> int:
-    """Decimals of a difference per 100: more where one decimal would print 0.0."""
-    if size >= SMALLEST_PERCENT and _scaled(size, HUNDRED_DECIMALS + 2) == 0:
-        return _significant_decimals(size, SMALL_FIGURES) - 2
-    return HUNDRED_DECIMALS
+def _apart_from_estimate(limit: float, estimate: float, decimals: int) -> int:
+    """One decimal more where a limit would print as the estimate does, if it then lies on its own side of it."""
+    if limit == estimate or limit * estimate <= 0:
+        return decimals
+    shown = _scaled(estimate, decimals + 2)
+    finer = _scaled(limit, decimals + 3) - 10 * shown
+    apart = finer > 0 if abs(limit) > abs(estimate) else finer < 0
+    return decimals + 1 if _scaled(limit, decimals + 2) == shown and apart else decimals
 
 
 def _ratio_decimals(x: float) -> int:
