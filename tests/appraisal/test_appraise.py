@@ -42,7 +42,7 @@ def test_a_quick_family_never_follows(study, family, monkeypatch):
 def test_exact_figures_follow_until_the_libraries_are_loaded(study, monkeypatch):
     """Before the libraries are loaded the exact intervals and p follow, while estimates and closed forms stand."""
     monkeypatch.setattr(module, "numbers_loaded", lambda: False)
-    findings = appraise(study(38, 374, 70, 339), EXACT, deferring=True)
+    findings = appraise(study(38, 374, 70, 339, baseline="12%"), EXACT, deferring=True)
     for key in ("risk_index", "risk_reference", "odds_index", "odds_reference", "odds_ratio"):
         figure = findings.measures[key]
         assert isinstance(figure, Figure)

@@ -8,6 +8,7 @@ import pytest
 
 from fourcount.appraisal.conversion import converted_figure, mapped
 from fourcount.appraisal.findings import Figure, Gap, Interval, Range
+from fourcount.stats.conversion import risk_ratio_from_odds_ratio
 
 # Zhang and Yu 1998 (JAMA 280:1690), RR = OR/((1-P0)+P0*OR), evaluated with mpmath 1.4.1 at 50 digits.
 FORMULA = [(0.6, 0.906, 0.9410288582183187), (3.0, 0.1, 2.5), (0.5, 0.5, 0.66666666666666667)]
@@ -52,13 +53,31 @@ def test_an_odds_ratio_of_0_says_nothing_where_everybody_has_the_event():
 # ratios 0.6 and 0.4, risk ratios 0.93 and 0.87.
 @pytest.mark.parametrize(("risk", "odds_ratio", "risk_ratio"), [(847, 0.6, 0.93), (788, 0.4, 0.87)])
 def test_at_the_reference_risk_the_conversion_gives_the_risk_ratio(appraised, risk, odds_ratio, risk_ratio):
-    """The crude odds ratio at the table's own reference risk is the table's risk ratio."""
+    """The crude odds ratio at the table's own reference risk is the table's risk ratio, and its figure stands there."""
     findings = appraised(risk, 1000 - risk, 906, 94)
     conversion = findings.conversion
     assert conversion.baseline_from == "reference"
     assert odds_ratio == round(findings.measures["odds_ratio"].estimate, 1)
     assert risk_ratio == round(conversion.risk_ratio.estimate, 2)
-    assert math.isclose(findings.measures["risk_ratio"].estimate, conversion.risk_ratio.estimate, rel_tol=1e-12)
+    by_formula = risk_ratio_from_odds_ratio(findings.measures["odds_ratio"].estimate, conversion.baseline)
+    assert math.isclose(by_formula, conversion.risk_ratio.estimate, rel_tol=1e-12)
+    assert findings.measures["risk_ratio"] == conversion.risk_ratio
+
+
+def test_at_the_own_risk_no_limit_is_converted(appraised):
+    """49/50 v 40/50: the converted limits, 1.10 to 1.25, would leave out half of the direct interval."""
+    findings = appraised(49, 1, 40, 10)
+    converted = converted_figure(findings.measures["odds_ratio"], findings.conversion.baseline).interval
+    direct = findings.conversion.risk_ratio.interval
+    assert findings.measures["risk_ratio"].interval == direct
+    assert converted.high - converted.low < 0.5 * (direct.high - direct.low)
+
+
+@pytest.mark.parametrize(("cells", "key"), [((0, 10, 0, 20), "no-events"), ((10, 0, 20, 0), "no-non-events")])
+def test_without_an_odds_ratio_nothing_is_seen_as_a_risk_ratio(appraised, cells, key):
+    """A withheld odds ratio stays withheld as a risk ratio, also where the table has one."""
+    found = appraised(*cells).conversion.risk_ratio
+    assert (Gap(key), Gap(key)) == (found.estimate, found.interval)
 
 
 def test_a_typed_starting_risk_is_used(appraised):

@@ -61,9 +61,9 @@ def test_cells_are_named_by_group_and_outcome(hands: Hands) -> None:
 def test_a_row_says_its_figures_and_its_notes(hands: Hands) -> None:
     """Name, estimate and interval are its name; method, denominators and notes its description."""
     hands.do("example")
-    row = hands.row("odds_ratio")
-    assert row.accessibleName() == "Odds ratio: 0.49, 0.32 to 0.75"
-    assert "as a risk ratio at 17.1%" in row.accessibleDescription()
+    row = hands.row("risk_ratio")
+    assert row.accessibleName() == "Risk ratio: 0.54, 0.37 to 0.78"
+    assert "relative reduction 46%" in row.accessibleDescription()
 
 
 def test_a_row_is_one_thing_to_press(hands: Hands) -> None:

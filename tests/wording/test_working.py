@@ -59,6 +59,15 @@ def test_the_odds_ratio_shows_its_conversion_and_its_source(outcome_of, findings
     assert rows["Conditional estimate, given both margins"] == "0.49"
 
 
+def test_at_the_own_starting_risk_the_odds_ratio_shows_the_direct_risk_ratio(outcome_of, findings_of):
+    """The interval is the risk ratio's own, and nothing claims to be converted."""
+    rows = rows_of("odds_ratio", outcome_of(), findings_of)
+    assert rows["As a risk ratio at 17.1%"] == "0.54 (0.37 to 0.78)"
+    assert (
+        rows["How"] == "At the study’s own risk this is the table’s own risk ratio and interval: nothing is converted"
+    )
+
+
 def test_the_p_values_of_all_tests_stand_together(outcome_of, findings_of):
     """In one way of writing."""
     rows = rows_of("test", outcome_of((12, 88, 10, 90)), findings_of)

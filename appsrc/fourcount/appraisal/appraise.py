@@ -85,4 +85,4 @@ def _at(
     if isinstance(start, Gap):
         return start, start
     effect = support.effect(outcome.patient.effect)
-    return (convert(figures["odds_ratio"], start), carry(figures, start, effect, support, welcome=outcome.welcome))
+    return (convert(figures, start), carry(figures, start, effect, support, welcome=outcome.welcome))

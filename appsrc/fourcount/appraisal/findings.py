@@ -74,7 +74,10 @@ class Probability(msgspec.Struct, frozen=True, kw_only=True):
 
 
 class Conversion(msgspec.Struct, frozen=True, kw_only=True):
-    """The odds ratio as a risk ratio at a starting risk (Zhang and Yu)."""
+    """The odds ratio as a risk ratio at a starting risk (Zhang and Yu).
+
+    At the table's own reference risk this is the table's own risk ratio with its direct interval and method.
+    """
 
     baseline: float
     baseline_from: Literal["reference", "given"]

@@ -217,8 +217,13 @@ def _other_outcome_note(figure: Figure | NumberNeeded | Gap) -> str:
 
 
 def conversion_text(conversion: Conversion | Gap, risk: str) -> str:
-    """The odds ratio as a risk ratio at a starting risk: "as a risk ratio at 12%: 0.52 (0.35 to 0.77)"."""
-    if isinstance(conversion, Gap) or isinstance(conversion.risk_ratio.estimate, Gap):
+    """The odds ratio as a risk ratio at a typed starting risk: "as a risk ratio at 12%: 0.52 (0.35 to 0.77)".
+
+    Nothing at the study's own: there it is the risk ratio, which has a line of its own.
+    """
+    if isinstance(conversion, Gap) or conversion.baseline_from == "reference":
+        return ""
+    if isinstance(conversion.risk_ratio.estimate, Gap):
         return ""
     figure = conversion.risk_ratio
     interval = limits.ratio_interval(figure.interval, figure.estimate)

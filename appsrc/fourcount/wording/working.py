@@ -39,6 +39,7 @@ BY_LIMITS = {
     "number_needed": "The reciprocal of each limit of the difference, rounded up (Altman 1998, BMJ 317:1309)",
 }
 CONVERSION_SOURCE = "OR/(1 − p + p × OR) at starting risk p (Zhang and Yu 1998, JAMA 280:1690)"
+OWN_CONVERSION = "At the study’s own risk this is the table’s own risk ratio and interval: nothing is converted"
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
@@ -198,7 +199,8 @@ def _conversion_rows(conversion: Conversion | Gap, risk: str) -> list[Row]:
     if isinstance(figure.estimate, Gap):
         return [(label, gap_text(figure.estimate))]
     interval = limits.bracketed(limits.ratio_interval(figure.interval, figure.estimate))
-    return [(label, f"{numbers.ratio(figure.estimate)}{interval}"), ("How", CONVERSION_SOURCE)]
+    how = CONVERSION_SOURCE if conversion.baseline_from == "given" else OWN_CONVERSION
+    return [(label, f"{numbers.ratio(figure.estimate)}{interval}"), ("How", how)]
 
 
 def _conditional_row(counts: Counts) -> Row:
