@@ -23,8 +23,33 @@ NO_OPTIONS = (
     ("--design", "%s{0}"), ("--intervals", "Score"), ("--json=1",), ("--lev", "95"),
     ("--", "5"), ("-x",), ("--%s",), ("-hx",),
 )  # fmt: skip
-NO_WHOLE_NUMBERS = (True, 1.0, -0.0, float("nan"), None, "1", b"1", Decimal(1), -1, 10**9 + 1, 10**5000, [], 1j)
-NO_LEVELS = (True, float("nan"), float("inf"), 0, 95, None, "0.95", Decimal("nan"), 10**5000, 0.95 + 0j)
+NO_WHOLE_NUMBERS: tuple[object, ...] = (
+    True,
+    1.0,
+    -0.0,
+    float("nan"),
+    None,
+    "1",
+    b"1",
+    Decimal(1),
+    -1,
+    10**9 + 1,
+    10**5000,
+    [],
+    1j,
+)
+NO_LEVELS: tuple[object, ...] = (
+    True,
+    float("nan"),
+    float("inf"),
+    0,
+    95,
+    None,
+    "0.95",
+    Decimal("nan"),
+    10**5000,
+    0.95 + 0j,
+)
 
 
 def short(value: object) -> str:
