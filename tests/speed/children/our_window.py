@@ -14,7 +14,7 @@ from pathlib import Path
 import fourcount.__main__
 
 import fourcount.face.running_start  # isort: skip  # noqa: F401
-from first_paint import FirstPaint, report  # isort: skip
+from first_paint import SIZE, FirstPaint, report  # isort: skip
 
 from fourcount.face.application import make_application, make_window
 from fourcount.record.outcome import EventsAndOthers, Outcome
@@ -52,7 +52,7 @@ def main() -> None:
         window.session.changed.connect(watch.on_changed)
     else:
         window._later.loaded.connect(_done)
-    window.resize(1280, 800)  # as the bare window, whatever the screen
+    window.resize(*SIZE)  # as the bare window, whatever the screen
     window.show()
     sys.exit(application.exec())
 
