@@ -82,6 +82,7 @@ class Hands:
         """Go to a choice and step to an entry, as a closed box takes it: each step on the way is chosen too."""
         box.setFocus(Qt.FocusReason.TabFocusReason)
         wanted = box.findText(text)
+        assert wanted >= 0
         if wanted in (0, box.count() - 1):
             self.press("End" if wanted else "Home")
             return

@@ -19,7 +19,7 @@ def everything_typed(hands: Hands) -> list[str]:
     """The text of every field of the window that is part of the record."""
     window, grid = hands.window, hands.window.printed.grid
     fields = [
-        window.header.title, window.header.source, window.printed.span, *grid.cells.values(), *grid.labels.values(),
+        window.header.title, window.header.source, window.printed.name, window.printed.span, *grid.cells.values(), *grid.labels.values(),
         *grid.headings.values(), window.patient.baseline, window.patient.source,
     ]  # fmt: skip
     return [field.text() for field in fields]
@@ -270,11 +270,10 @@ def asked(monkeypatch: pytest.MonkeyPatch) -> Callable[..., list[tuple[str, str]
 def test_another_level_is_asked_for(example: Hands, asked: Callable[..., list[tuple[str, str]]]) -> None:
     """The question offers the level in use; the answer becomes an entry of its own."""
     shown = asked("97.5%")
-    example.choose(example.window.says.level, labels.OTHER_LEVEL)
+    example.do("level")
     assert shown == [("95%", "")]
     assert example.window.session.record.choices.level == pytest.approx(0.975)
     assert example.window.says.level.currentText() == "97.5%"
-    assert example.window.says.level.itemText(example.window.says.level.count() - 1) == labels.OTHER_LEVEL
     example.do("undo")
     assert example.window.says.level.currentText() == "95%"
 
@@ -282,7 +281,7 @@ def test_another_level_is_asked_for(example: Hands, asked: Callable[..., list[tu
 def test_bad_levels_are_asked_about_again(example: Hands, asked: Callable[..., list[tuple[str, str]]]) -> None:
     """Each bad answer comes back with a sentence about it, until one can be read."""
     shown = asked("abc", "50", "100", "", "-95", "0.9")
-    example.choose(example.window.says.level, labels.OTHER_LEVEL)
+    example.do("level")
     problems = [problem for _, problem in shown]
     assert problems[0] == ""
     assert problems[1] == "abc: a confidence level is needed, such as 95%"
@@ -300,7 +299,7 @@ def test_a_question_that_is_put_away_changes_nothing(
     """Without an answer the level stays, and the choice shows it again."""
     asked("abc", None)
     record = example.window.session.record
-    example.choose(example.window.says.level, labels.OTHER_LEVEL)
+    example.do("level")
     assert example.window.session.record is record
     assert example.window.says.level.currentText() == "95%"
 

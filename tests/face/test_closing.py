@@ -51,13 +51,16 @@ def test_what_was_undone_is_not_asked_about(hands: Hands, asked: list[bool]) -> 
     assert asked == []
 
 
-@pytest.mark.parametrize("place", ["cell", "label", "event", "baseline", "patient source", "title", "source"])
+@pytest.mark.parametrize(
+    "place", ["cell", "label", "outcome", "event", "baseline", "patient source", "title", "source"]
+)
 def test_whatever_was_typed_is_asked_about(hands: Hands, asked: list[bool], place: str) -> None:
     """A single word in any field is enough, and the answer No leaves the window as it was."""
     window, grid = hands.window, hands.window.printed.grid
     fields = {
         "cell": grid.cells["second_right_text"],
         "label": grid.labels["second"],
+        "outcome": window.printed.name,
         "event": window.printed.event_words,
         "baseline": window.patient.baseline,
         "patient source": window.patient.source,

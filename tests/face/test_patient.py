@@ -155,7 +155,7 @@ def test_the_picture_is_said_in_full(example: Hands) -> None:
         "6 (6%)",
         "94 did not",
         "6 fewer in 100",
-        "range",
+        "interval",
         WHICH_PEOPLE,
     ):
         assert part in said

@@ -113,8 +113,9 @@ def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) 
     """From the title to the cautions, left to right and top to bottom, each control once."""
     window, grid = example.window, example.window.printed.grid
     expected = [
-        window.header.title, window.header.source, window.printed.design, window.printed.event_words,
-        window.printed.welcome, window.printed.span, window.printed.form, window.printed.layout_choice,
+        window.header.title, window.header.source, window.printed.design, window.printed.name,
+        window.printed.welcome, window.printed.event_words, window.printed.span,
+        window.printed.form, window.printed.layout_choice,
         grid.headings["left"], grid.headings["right"], grid.labels["first"], grid.labels["second"],
         *grid.cells.values(), *window.printed.links, *(example.row(key) for key in (*MEASURES, "test")),
         window.says.family, window.says.level, window.says.more, window.says.help, *window.says.copies,
