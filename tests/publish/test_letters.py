@@ -153,6 +153,21 @@ def test_a_table_that_is_not_whole_says_so() -> None:
     assert all(row[1:4] == ("", "", "") for row in table_of(empty)[1:])
 
 
+def test_a_limit_beyond_everybody_is_told_from_an_estimate_beyond_everybody() -> None:
+    """A blank upper limit beside a risk that stands says that it is the limit that would pass 100%."""
+    outcome = outcome_of((70, 339, 38, 374), risk="45%")
+    found = {row[0].removeprefix("For one patient, "): row for row in table_of(outcome)}
+    _, estimate, _, high, reason = found["45%: risk with"]
+    assert NUMBER.fullmatch(estimate)
+    assert high == ""
+    assert "The upper limit of the risk would pass 100%" in reason
+    above = {
+        row[0].removeprefix("For one patient, "): row for row in table_of(outcome_of((70, 339, 38, 374), risk="70%"))
+    }
+    assert above["70%: risk with"][1] == ""
+    assert "The risk would pass 100% here" in above["70%: risk with"][4]
+
+
 def test_a_sheet_holds_unrounded_numbers() -> None:
     """The sheet's figures are the findings', to the last digit."""
     found = {row[0]: row for row in table_of(OUTCOME)}

@@ -124,7 +124,11 @@ def test_a_limit_beyond_everybody_leaves_the_estimate(outcome_of, findings_of):
     words = words_of(outcome_of(patient=at("45%"), index_group="second"), findings_of)
     assert words.with_count == "84 in 100"
     assert words.summary == "over 12 months, 95% interval 13 to no limit"
-    assert "The risk would pass 100% here" in words.detail
+    assert words.detail.count("100%") == 1
+    assert words.detail.endswith(
+        "The upper limit of the risk would pass 100%, so the interval is open there; carrying the odds ratio avoids "
+        "it. The interval leaves out that 45% is itself uncertain."
+    )
 
 
 def test_without_a_starting_risk_a_case_control_study_says_what_it_needs(outcome_of, findings_of):

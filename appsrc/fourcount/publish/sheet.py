@@ -14,6 +14,7 @@ from fourcount.appraisal.findings import (
     NumberNeededLimit,
     OutcomeFindings,
     PatientFindings,
+    Range,
 )
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
@@ -21,7 +22,7 @@ from fourcount.record.paper import Choices
 from fourcount.wording import labels, lines, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
-from fourcount.wording.gaps import gap_text
+from fourcount.wording.gaps import gap_text, limit_text
 
 Row = tuple[str, str, str, str, str]
 
@@ -101,7 +102,9 @@ def _figure(name: str, figure: Figure) -> Row:
     interval = figure.interval
     low, high = (interval, interval) if isinstance(interval, Gap) else (interval.low, interval.high)
     adjusted = "" if isinstance(interval, Gap) or interval.adjusted is None else HALF_ADDED
-    reasons = [gap_text(part) for part in (figure.estimate, low, high) if isinstance(part, Gap)]
+    say = limit_text if isinstance(interval, Range) else gap_text
+    reasons = [gap_text(figure.estimate)] if isinstance(figure.estimate, Gap) else []
+    reasons += [say(limit) for limit in (low, high) if isinstance(limit, Gap)]
     method = "; ".join(part for part in (figure.method, adjusted, *dict.fromkeys(reasons)) if part)
     return (name, _number(figure.estimate), _number(low), _number(high), method)
 

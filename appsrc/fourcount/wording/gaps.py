@@ -33,6 +33,12 @@ GAP_TEXTS = {
     "bare-starting-risk": "The starting risk was typed without a range of its own.",
     "limit-withheld": "One limit of the difference cannot be given, so the number needed has no interval.",
 }
+LIMIT_TEXTS = {
+    "beyond-one": "The upper limit of the risk would pass 100%, so the interval is open there; "
+    "carrying the odds ratio avoids it.",
+}
+"""What is said where only a limit is withheld and the estimate stands."""
+
 UNKNOWN_GAP = "This figure cannot be given."
 
 MARK_TEXTS = {
@@ -55,6 +61,11 @@ UNKNOWN_MARK = "{text}: this cannot be read"
 def gap_text(gap: Gap) -> str:
     """One sentence that says why a figure is not given, and what would help where something would."""
     return told(GAP_TEXTS.get(gap.key, UNKNOWN_GAP), gap.facts)
+
+
+def limit_text(gap: Gap) -> str:
+    """The sentence for one limit that is not given beside an estimate that is."""
+    return LIMIT_TEXTS.get(gap.key) or gap_text(gap)
 
 
 def mark_text(mark: Mark | Unreadable) -> str:

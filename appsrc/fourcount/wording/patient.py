@@ -5,21 +5,18 @@ from __future__ import annotations
 from dataclasses import dataclass
 
 from fourcount.appraisal.drawn import other_side
-from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings, PatientFindings
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
 from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
-from fourcount.wording import limits, names, numbers
+from fourcount.wording import carried, limits, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.gaps import gap_text
-from fourcount.wording.headline import choose
 
 LONGEST_KEY = 40
-NOT_GIVEN = "not given"
 TOO_SMALL = "too small to draw"
 UNWELCOME_DRAWN = "Drawn: people with the unwelcome outcome."
 WHICH_PEOPLE = "We cannot say which people."
-CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
 DO_NOT_ADD_UP = "Whole numbers are rounded, so they need not add up."
 
 
@@ -66,14 +63,14 @@ def patient_words(
         )
     named, own = outcome, patient
     outcome, patient = drawn(outcome, patient)
-    people = denominator or _text_only_denominator(patient)
+    people = denominator or carried.denominator_for_text(patient)
     change = patient.difference.estimate
     return PatientWords(
         without_title=without_title,
         with_title=with_title,
-        without_count=_count(patient.without, people),
+        without_count=carried.count(patient.without, people),
         without_percent=_percent_said(patient.without, people, named),
-        with_count=_count(patient.with_, people),
+        with_count=carried.count(patient.with_, people),
         with_percent=_percent_said(patient.with_, people, named),
         without_other=_others(patient.without, people, outcome),
         with_other=_others(patient.with_, people, outcome),
@@ -113,46 +110,9 @@ def missing(outcome: Outcome) -> tuple[str, ...]:
     return tuple(name for name, text in wanted.items() if not text)
 
 
-def _text_only_denominator(patient: PatientFindings) -> int:
-    """Where nothing can be drawn, the smallest round number of people whose whole numbers say what is so."""
-    without = 0.0 if isinstance(patient.without.estimate, Gap) else patient.without.estimate
-    with_, change = patient.with_.estimate, patient.difference.estimate
-    if isinstance(with_, Gap) or isinstance(change, Gap):
-        with_, change = without, 0.0
-    return choose(without, with_, change).denominator
-
-
-def _count(figure: Figure, people: int) -> str:
-    """``12 in 100``."""
-    if isinstance(figure.estimate, Gap):
-        return NOT_GIVEN
-    return f"{_whole(figure.estimate, people)} in {numbers.whole(people)}"
-
-
-def _whole(risk: float, people: int) -> str:
-    """Whole people, never nobody for somebody nor everybody for nearly everybody."""
-    n = numbers.people(risk, people)
-    if n == 0 and risk:
-        return "under 1"
-    if n >= people and risk < 1:
-        return f"over {numbers.whole(people - 1)}"
-    return numbers.whole(n)
-
-
-def _percent(figure: Figure, people: int) -> str:
-    """The same share as a percentage with the same digits: 12% of 100, 1.2% of 1,000."""
-    if isinstance(figure.estimate, Gap):
-        return ""
-    risk = figure.estimate
-    n = numbers.people(risk, people)
-    if (n == 0 and risk) or (n >= people and risk < 1):
-        return numbers.percent_whole(risk)
-    return f"{numbers.fixed_percent(risk, len(str(people)) - 3)}%"
-
-
 def _percent_said(figure: Figure, people: int, named: Outcome) -> str:
     """The percentage; of a welcome event it says what it counts, since the sentence beside it counts the other side."""
-    percent = _percent(figure, people)
+    percent = carried.percentage(figure, people)
     return f"{percent} {names.event_words(count_other_outcome(named))}" if percent and named.welcome else percent
 
 
@@ -175,63 +135,30 @@ def _key(verb: str, outcome: Outcome) -> str:
     return f"{name} {verb}, on balance" if name and len(name) <= LONGEST_KEY else f"{verb}, on balance"
 
 
-def _change(difference: Figure, people: int) -> str:
-    """``6 fewer in 100``, from the difference itself."""
-    change = difference.estimate
-    if isinstance(change, Gap):
-        return ""
-    if change == 0:
-        return f"The same number in {numbers.whole(people)}"
-    return f"{_size(change, people)} {limits.side(change)} in {numbers.whole(people)}"
-
-
 def _change_said(outcome: Outcome, difference: Figure, people: int) -> str:
     """``6 fewer in 100 fell at least once``."""
-    change = _change(difference, people)
+    change = carried.change(difference, people)
     return f"{change} {names.event_words(outcome)}" if change else ""
-
-
-def _size(change: float, people: int) -> str:
-    n = numbers.people(change, people)
-    return "under 1" if n == 0 and change else numbers.whole(n)
-
-
-def _interval(patient: PatientFindings, choices: Choices, people: int) -> str:
-    """``95% interval 3 to 8``, or "" where there is none."""
-
-    def write(x: float) -> str:
-        return _size(x, people)
-
-    interval = limits.sided(patient.difference.interval, patient.difference.estimate, write)
-    return f"{numbers.level(choices.level)} interval {interval}" if interval else ""
 
 
 def _summary(outcome: Outcome, patient: PatientFindings, choices: Choices, people: int) -> str:
     if isinstance(patient.difference.estimate, Gap):
         return ""
-    parts = (names.over_span(outcome), _interval(patient, choices, people))
+    parts = (names.over_span(outcome), carried.interval(patient, choices, people))
     return ", ".join(part for part in parts if part)
 
 
 def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
     """What stands under the summary: number needed, relative words, and what the interval leaves out."""
     if isinstance(patient.with_.estimate, Gap):
-        return _reason(patient.with_.estimate, patient)
-    sentences = [_number_needed(patient.number_needed), _relative(named, patient.risk_ratio)]
-    sentences += [_reason(gap, patient) for gap in _gaps(patient.difference)]
+        return carried.reason(patient.with_.estimate, patient)
+    sentences = [carried.number_needed(patient.number_needed), _relative(named, patient.risk_ratio)]
+    sentences += carried.reasons(patient)
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
         sentences.append(f"The interval leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
     if not _adds_up(patient, people):
         sentences.append(DO_NOT_ADD_UP)
     return " ".join(part for part in dict.fromkeys(sentences) if part)
-
-
-def _number_needed(needed: NumberNeeded | Gap) -> str:
-    if isinstance(needed, Gap):
-        return gap_text(needed)
-    kind = "NNT" if needed.kind == "neither" else needed.kind
-    interval = limits.number_needed_interval(needed)
-    return f"{kind} at this starting risk {numbers.number_needed(needed.estimate)} ({interval})."
 
 
 def _relative(named: Outcome, ratio: Figure) -> str:
@@ -247,19 +174,6 @@ def _relative(named: Outcome, ratio: Figure) -> str:
             f"The welcome outcome itself is, in relative words, {numbers.percent_whole(abs(change))} {word}{interval}."
         )
     return f"In relative words {numbers.percent_whole(abs(change))} {word}{interval}."
-
-
-def _reason(gap: Gap, patient: PatientFindings) -> str:
-    """Why something is withheld here; where a carried risk ratio passes 100%, odds never do."""
-    passes = gap.key == "beyond-one" and patient.range_from == "effect"
-    return CARRY_THE_ODDS if passes else gap_text(gap)
-
-
-def _gaps(figure: Figure) -> tuple[Gap, ...]:
-    """Whatever a figure withholds: its estimate, its interval or one limit."""
-    interval = figure.interval
-    ends = (interval,) if isinstance(interval, Gap) else (interval.low, interval.high)
-    return tuple(part for part in (figure.estimate, *ends) if isinstance(part, Gap))
 
 
 def _adds_up(patient: PatientFindings, people: int) -> bool:
@@ -287,7 +201,7 @@ def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -
         f"{event}{f' {span}' if span else ''} and {_others(patient.without, people, outcome)}"
     )
     if isinstance(patient.with_.estimate, Gap):
-        reason = _reason(patient.with_.estimate, patient)
+        reason = carried.reason(patient.with_.estimate, patient)
         return f"{first}. {names.sentence_case(names.in_group(outcome, 'index'))}: {reason}"
     second = (
         f"of {all_people} {names.in_group(outcome, 'index')} {_affected(patient.with_, people)} "
@@ -300,13 +214,13 @@ def _change_sentence(named: Outcome, own: PatientFindings, choices: Choices, peo
     """How the picture's sentence ends: the change of the named outcome, and its interval."""
     if isinstance(own.with_.estimate, Gap):
         return ""
-    change = _change_said(named, own.difference, people) if named.welcome else _change(own.difference, people)
-    interval = _interval(own, choices, people)
+    change = _change_said(named, own.difference, people) if named.welcome else carried.change(own.difference, people)
+    interval = carried.interval(own, choices, people)
     return f": {change[:1].lower()}{change[1:]}{f', {interval}' if interval else ''}. {WHICH_PEOPLE}"
 
 
 def _affected(figure: Figure, people: int) -> str:
     """``12 (12%)``."""
     if isinstance(figure.estimate, Gap):
-        return NOT_GIVEN
-    return f"{_whole(figure.estimate, people)} ({_percent(figure, people)})"
+        return carried.NOT_GIVEN
+    return f"{carried.whole_people(figure.estimate, people)} ({carried.percentage(figure, people)})"

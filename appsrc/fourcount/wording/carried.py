@@ -1,0 +1,99 @@
+"""A patient's figures one by one: so many people, how many more or fewer, the number needed, and why one is missing."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, PatientFindings
+from fourcount.record.paper import Choices
+from fourcount.wording import limits, numbers
+from fourcount.wording.gaps import gap_text, limit_text
+from fourcount.wording.headline import choose
+
+NOT_GIVEN = "not given"
+CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
+
+
+def denominator_for_text(patient: PatientFindings) -> int:
+    """Where nothing can be drawn, the smallest round number of people whose whole numbers say what is so."""
+    without = 0.0 if isinstance(patient.without.estimate, Gap) else patient.without.estimate
+    with_, change = patient.with_.estimate, patient.difference.estimate
+    if isinstance(with_, Gap) or isinstance(change, Gap):
+        with_, change = without, 0.0
+    return choose(without, with_, change).denominator
+
+
+def count(figure: Figure, people: int) -> str:
+    """``12 in 100``."""
+    if isinstance(figure.estimate, Gap):
+        return NOT_GIVEN
+    return f"{whole_people(figure.estimate, people)} in {numbers.whole(people)}"
+
+
+def whole_people(risk: float, people: int) -> str:
+    """Whole people, never nobody for somebody nor everybody for nearly everybody."""
+    n = numbers.people(risk, people)
+    if n == 0 and risk:
+        return "under 1"
+    if n >= people and risk < 1:
+        return f"over {numbers.whole(people - 1)}"
+    return numbers.whole(n)
+
+
+def percentage(figure: Figure, people: int) -> str:
+    """The same share as a percentage with the same digits: 12% of 100, 1.2% of 1,000."""
+    if isinstance(figure.estimate, Gap):
+        return ""
+    risk = figure.estimate
+    n = numbers.people(risk, people)
+    if (n == 0 and risk) or (n >= people and risk < 1):
+        return numbers.percent_whole(risk)
+    return f"{numbers.fixed_percent(risk, len(str(people)) - 3)}%"
+
+
+def change(difference: Figure, people: int) -> str:
+    """``6 fewer in 100``, from the difference itself."""
+    change = difference.estimate
+    if isinstance(change, Gap):
+        return ""
+    if change == 0:
+        return f"The same number in {numbers.whole(people)}"
+    return f"{_size(change, people)} {limits.side(change)} in {numbers.whole(people)}"
+
+
+def _size(change: float, people: int) -> str:
+    n = numbers.people(change, people)
+    return "under 1" if n == 0 and change else numbers.whole(n)
+
+
+def interval(patient: PatientFindings, choices: Choices, people: int) -> str:
+    """``95% interval 3 to 8``, or "" where there is none."""
+
+    def write(x: float) -> str:
+        return _size(x, people)
+
+    interval = limits.sided(patient.difference.interval, patient.difference.estimate, write)
+    return f"{numbers.level(choices.level)} interval {interval}" if interval else ""
+
+
+def number_needed(needed: NumberNeeded | Gap) -> str:
+    """The number needed of this column, told apart from that of the study."""
+    if isinstance(needed, Gap):
+        return gap_text(needed)
+    kind = "NNT" if needed.kind == "neither" else needed.kind
+    interval = limits.number_needed_interval(needed)
+    return f"{kind} at this starting risk {numbers.number_needed(needed.estimate)} ({interval})."
+
+
+def reason(gap: Gap, patient: PatientFindings) -> str:
+    """Why something is withheld here; where a carried risk ratio passes 100%, odds never do."""
+    passes = gap.key == "beyond-one" and patient.range_from == "effect"
+    return CARRY_THE_ODDS if passes else gap_text(gap)
+
+
+def reasons(patient: PatientFindings) -> tuple[str, ...]:
+    """Why the difference, its interval or one limit is not there, each reason once."""
+    difference, interval = patient.difference, patient.difference.interval
+    if isinstance(difference.estimate, Gap):
+        return (reason(difference.estimate, patient),)
+    if isinstance(interval, Gap):
+        return (gap_text(interval),)
+    return tuple(dict.fromkeys(limit_text(end) for end in (interval.low, interval.high) if isinstance(end, Gap)))
