@@ -19,8 +19,8 @@ def everything_typed(hands: Hands) -> list[str]:
     """The text of every field of the window that is part of the record."""
     window, grid = hands.window, hands.window.printed.grid
     fields = [
-        window.header.title, window.header.source, window.printed.name, window.printed.span, *grid.cells.values(), *grid.labels.values(),
-        *grid.headings.values(), window.patient.baseline, window.patient.source,
+        window.header.title, window.header.source, window.printed.name, window.printed.span, *grid.cells.values(),
+        *grid.labels.values(), *grid.headings.values(), window.patient.baseline, window.patient.source,
     ]  # fmt: skip
     return [field.text() for field in fields]
 

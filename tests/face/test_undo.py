@@ -62,8 +62,8 @@ def test_the_keys_work_in_every_kind_of_field(hands: Hands) -> None:
     window, grid = hands.window, hands.window.printed.grid
     fields = [
         window.header.title, window.header.source, window.printed.name, window.printed.event_words,
-        window.printed.span, grid.headings["right"], grid.labels["second"], grid.cells[CELLS[3]], window.patient.baseline,
-        window.patient.source,
+        window.printed.span, grid.headings["right"], grid.labels["second"], grid.cells[CELLS[3]],
+        window.patient.baseline, window.patient.source,
     ]  # fmt: skip
     for field in fields:
         hands.write(field, "7")
