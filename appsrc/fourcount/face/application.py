@@ -2,12 +2,15 @@
 
 from __future__ import annotations
 
+import os
 import signal
 from pathlib import Path
 
+from PySide6.QtGui import QIcon
 from PySide6.QtWidgets import QApplication
 
 from fourcount import __version__
+from fourcount.assets_folder import assets_folder
 from fourcount.face.errors import ErrorListener
 from fourcount.face.later import Later
 from fourcount.face.look import Look
@@ -15,6 +18,9 @@ from fourcount.face.session import Session
 from fourcount.face.settings import Settings, own_folder
 from fourcount.face.window import MainWindow
 from fourcount.record.paper import Record
+
+LONGEST_WAIT = 5.0
+"""Seconds for which a closed window waits for its threads."""
 
 
 def make_application(arguments: list[str]) -> QApplication:
@@ -27,16 +33,17 @@ def make_application(arguments: list[str]) -> QApplication:
     application.setApplicationVersion(__version__)
     application.setDesktopFileName("fourcount")
     application.setStyle("Fusion")
+    application.setWindowIcon(QIcon(str(assets_folder() / "fourcount.png")))
     return application
 
 
-def make_window(settings_folder: Path, record: Record | None = None) -> MainWindow:
-    """A window on a record, or on an empty one with the choices last used."""
+def make_window(settings_folder: Path, record: Record | None = None, later: Later | None = None) -> MainWindow:
+    """A window on a record, or on an empty one with the choices last used; ``later`` is its worker."""
     settings = Settings(settings_folder)
     if record is None:
         record = Record(choices=settings.choices())
     look = Look(settings.zoom(), settings.appearance())
-    window = MainWindow(Session(record), look, settings, Later())
+    window = MainWindow(Session(record), look, settings, later or Later())
     look.setParent(window)
     window.session.setParent(window)
     return window
@@ -46,13 +53,15 @@ def run() -> int:
     """Open the window and stay until it is closed."""
     application = make_application(["fourcount"])
     folder = own_folder()
-    window = make_window(folder)
+    later = Later()
+    window = make_window(folder, later=later)
     listener = ErrorListener(folder)
     listener.happened.connect(window.tell_unexpected)
     listener.install()
     signal.signal(signal.SIGINT, signal.SIG_DFL)
     window.show()
-    try:
-        return application.exec()
-    finally:
-        listener.remove()
+    status = application.exec()
+    listener.remove()
+    if not later.finish(LONGEST_WAIT):
+        os._exit(status)  # a thread that still runs while the interpreter ends would abort it
+    return status

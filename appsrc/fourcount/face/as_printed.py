@@ -37,6 +37,7 @@ class AsPrinted(QWidget):
     def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
         super().__init__()
         self._look = look
+        self.setAccessibleName(labels.COLUMNS["printed"])
         self.design = ChoiceField(look, labels.FIELDS["design"], tuple(labels.DESIGNS.items()))
         self.name = TextField(look, "name_text", labels.FIELDS["name_text"], labels.HINTS["name_text"])
         self.event_words = TextField(look, "left_words_text", labels.FIELDS["left_words_text"], labels.HINTS["words"])
@@ -99,13 +100,13 @@ class AsPrinted(QWidget):
         printed = QHBoxLayout()
         printed.addWidget(self.form, 3)
         printed.addWidget(self.layout_choice, 3)
-        printed.setSpacing(12)
+        self._printed_row = printed
         self._form_rows.addLayout(printed, 4, 1, 1, 2)
         links = FlowLayout(self._look)
         for link in self.links:
             links.addWidget(link)
         self._column = QVBoxLayout(self)
-        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["printed"].upper(), wraps=False))
+        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["printed"], wraps=False))
         self._column.addLayout(self._form_rows)
         self._column.addWidget(self.grid)
         self._column.addWidget(self.notes)
@@ -129,3 +130,4 @@ class AsPrinted(QWidget):
         self._column.setSpacing(px(16))
         self._form_rows.setHorizontalSpacing(px(12))
         self._form_rows.setVerticalSpacing(px(4))
+        self._printed_row.setSpacing(px(12))

@@ -61,7 +61,7 @@ class CautionsText(QWidget):
         """Walk down the strip and give its height; without a painter only measure."""
         look, colours = self._look, self._look.palette
         px, margin, y = look.px, look.px(24), float(look.px(11))
-        head = labels.COLUMNS["cautions"].upper()
+        head = labels.COLUMNS["cautions"]
         beside = width >= px(700)
         x = margin + max(px(104), text_width(head, look.font("head")) + px(16)) if beside else float(margin)
         if painter:

@@ -36,6 +36,7 @@ class ColumnsLayout(QLayout):
         super().__init__(parent)
         self._look = look
         self._items: list[QLayoutItem] = []
+        self._measured: dict[tuple[int, float], list[list[tuple[int, int]]]] = {}
         self.setContentsMargins(0, 0, 0, 0)
 
     def arrangement(self, width: int) -> Arrangement:
@@ -62,7 +63,11 @@ class ColumnsLayout(QLayout):
         return max((sum(h for _, h in pillar) for pillar in self._heights(width)), default=0)
 
     def sizeHint(self) -> QSize:
-        return QSize(self._look.px(1200), self.heightForWidth(self._look.px(1200)))
+        return self.minimumSize()
+
+    def invalidate(self) -> None:
+        self._measured.clear()
+        super().invalidate()
 
     def minimumSize(self) -> QSize:
         widest = max((item.minimumSize().width() for item in self._items), default=0)
@@ -85,7 +90,13 @@ class ColumnsLayout(QLayout):
         return [right - left for left, right in pairwise(edges)]
 
     def _heights(self, width: int) -> list[list[tuple[int, int]]]:
-        """For each pillar, its columns with the heights they ask for."""
+        """For each pillar, its columns with the heights they ask for; measured once."""
+        asked = (width, self._look.zoom)
+        if asked not in self._measured:
+            self._measured[asked] = self._measure(width)
+        return self._measured[asked]
+
+    def _measure(self, width: int) -> list[list[tuple[int, int]]]:
         pillars = self.arrangement(width).pillars
         return [
             [(index, self._items[index].heightForWidth(wide)) for index in pillar if index < len(self._items)]

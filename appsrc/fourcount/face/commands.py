@@ -96,9 +96,9 @@ class Commands(QObject):
         """Take a family of intervals."""
         self._session.change_record(editing.with_family(self._session.record, key))
 
-    def choose_level(self, key: str) -> None:
-        """Take a confidence level, a fraction as text."""
-        self._session.change_record(editing.with_level(self._session.record, float(key)))
+    def choose_level(self, level: float) -> None:
+        """Take a confidence level, a fraction."""
+        self._session.change_record(editing.with_level(self._session.record, level))
 
     def copy_text(self) -> None:
         """Copy the findings as text."""

@@ -11,6 +11,9 @@ from PySide6.QtWidgets import QComboBox, QLineEdit, QSizePolicy, QWidget
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
 
+LONGEST_TEXT = 10_000_000
+"""Far beyond anything that is pasted: Qt's own limit would cut a text in silence."""
+
 UNDOING = (QKeySequence.StandardKey.Undo, QKeySequence.StandardKey.Redo)
 
 
@@ -42,6 +45,7 @@ class TextField(QLineEdit):
         self._look = look
         self._role: Role = role
         self.setFrame(False)
+        self.setMaxLength(LONGEST_TEXT)
         self.setTextMargins(-2, 0, -2, 0)
         self.setAccessibleName(name)
         self.setPlaceholderText(hint)
@@ -150,13 +154,13 @@ class ChoiceField(QComboBox):
         chosen: a person chose. Carries the key of the choice.
     """
 
-    chosen = Signal(str)
+    chosen = Signal(object)
 
     def __init__(
         self,
         look: Look,
         name: str,
-        choices: Sequence[tuple[str, str]],
+        choices: Sequence[tuple[object, str]],
         prefix: str = "",
         plain: bool = False,
         whole: bool = False,
@@ -177,7 +181,7 @@ class ChoiceField(QComboBox):
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 
-    def show_choice(self, key: str) -> None:
+    def show_choice(self, key: object) -> None:
         """Show the choice with this key."""
         index = self.findData(key)
         if index != self.currentIndex():

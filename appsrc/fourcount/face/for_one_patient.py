@@ -38,7 +38,9 @@ class PictureView(QWidget):
         look.changed.connect(self._on_look_changed)
 
     def show_picture(self, picture: Picture | None, sentence: str) -> None:
-        """Show a picture, or nothing."""
+        """Show a picture, or nothing; an equal one changes nothing."""
+        if picture is not None and picture == self.picture:
+            return
         self.picture = picture
         self.setAccessibleName(labels.COLUMNS["patient"])
         self.setAccessibleDescription(sentence)
@@ -80,12 +82,13 @@ class ForOnePatient(QWidget):
 
     edited = Signal(str, str)
     left = Signal(str)
-    effect_chosen = Signal(str)
+    effect_chosen = Signal(object)
 
     def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
         super().__init__()
         self._look = look
         self._bars = False
+        self.setAccessibleName(labels.COLUMNS["patient"])
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self.baseline = TextField(look, "starting_risk_text", labels.FIELDS["starting_risk_text"], role="total")
         self.source = TextField(
@@ -150,7 +153,7 @@ class ForOnePatient(QWidget):
         copies = FlowLayout(self._look)
         copies.addWidget(self.copy)
         self._column = QVBoxLayout(self)
-        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["patient"].upper(), wraps=False))
+        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["patient"], wraps=False))
         self._column.addLayout(self._fields)
         for widget in (self.mark, self.waits, self.picture, self.summary, self.detail):
             self._column.addWidget(widget)

@@ -36,7 +36,6 @@ class CountCell(TextField):
     def __init__(self, look: Look, field: str) -> None:
         super().__init__(look, field, "", role="cell")
         self.setAlignment(Qt.AlignmentFlag.AlignRight)
-        self.setTextMargins(6, 0, 8, 0)
 
     def sizeHint(self) -> QSize:
         return QSize(self._look.px(84), self._look.px(40))
@@ -74,6 +73,7 @@ class CountCell(TextField):
 
     def _fit_text(self) -> None:
         """Set a long text in a smaller size, so that it is seen whole."""
+        self.setTextMargins(self._look.px(6), 0, self._look.px(8), 0)
         room = self.width() - self._look.px(18) - (self._look.px(8) if self.marked else 0)
         for role in CELL_ROLES:
             font = self._look.font(role)
@@ -120,11 +120,15 @@ class Grid(QWidget):
         self._arranged: tuple[str, bool] | None = None
         self.cells = {field: CountCell(look, field) for field in CELLS}
         self.labels = {
-            position: QuietField(look, f"{position}_label_text", f"Name of the {name}", labels.HINTS["label"])
+            position: QuietField(
+                look, f"{position}_label_text", labels.FIELDS["label"].format(group=name), labels.HINTS["label"]
+            )
             for position, name in labels.GROUP_NAMES.items()
         }
         self.headings = {
-            column: QuietField(look, f"{column}_heading_text", f"Short name of the {column} outcome", role="small")
+            column: QuietField(
+                look, f"{column}_heading_text", labels.FIELDS["heading"].format(column=column), role="small"
+            )
             for column in ("left", "right")
         }
         self.roles = {key: self._small() for key in ("first", "second", "left", "right")}

@@ -24,6 +24,7 @@ class HelpWindow(QDialog):
         self._look = look
         self._parts: tuple[Part, ...] = ()
         self.setWindowTitle(title)
+        self.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose)
         self.text = QTextEdit()
         self.text.setReadOnly(True)
         self.text.setAcceptRichText(False)

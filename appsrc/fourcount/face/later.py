@@ -16,7 +16,9 @@ if TYPE_CHECKING:
 
 
 class Later(QObject):
-    """One worker thread at a time; of several requests only the newest is computed.
+    """One thread loads the libraries, one computes; of several requests only the newest is computed.
+
+    A thread must not outlive the interpreter, which would abort on it: ``finish`` waits for both.
 
     **Signals**
         arrived: figures are there. Carries the outcome, the choices and the findings they belong to.
@@ -34,6 +36,7 @@ class Later(QObject):
         self._lock = threading.Lock()
         self._busy = False
         self._closed = False
+        self._threads: list[threading.Thread] = []
         self.failed.connect(self._on_failed, Qt.ConnectionType.QueuedConnection)
 
     def load(self) -> None:
@@ -55,8 +58,17 @@ class Later(QObject):
             self._closed = True
             self._wanted = None
 
+    def finish(self, seconds: float) -> bool:
+        """Wait for the threads to end, so many seconds at most for each; whether they did."""
+        self.close()
+        for thread in self._threads:
+            thread.join(seconds)
+        return not any(thread.is_alive() for thread in self._threads)
+
     def _start(self, work: Callable[[], None]) -> None:
-        threading.Thread(target=work, daemon=True, name="fourcount-later").start()
+        thread = threading.Thread(target=work, daemon=True, name="fourcount-later")
+        self._threads = [thread, *(other for other in self._threads if other.is_alive())]
+        thread.start()
 
     def _load(self) -> None:
         try:

@@ -20,10 +20,11 @@ class Link(QAbstractButton):
         self.setCursor(Qt.CursorShape.PointingHandCursor)
         self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
         self.setSizePolicy(QSizePolicy.Policy.Fixed, QSizePolicy.Policy.Fixed)
+        self._shortcut = ""
         if action:
             self.clicked.connect(action.trigger)
-            shortcut = action.shortcut().toString(action.shortcut().SequenceFormat.NativeText)
-            self.setToolTip(f"{words}  {shortcut}".strip())
+            self._shortcut = action.shortcut().toString(action.shortcut().SequenceFormat.NativeText)
+            self.setToolTip(f"{words}  {self._shortcut}".strip())
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 
@@ -32,6 +33,7 @@ class Link(QAbstractButton):
         if words != self.text():
             self.setText(words)
             self.setAccessibleName(words)
+            self.setToolTip(f"{words}  {self._shortcut}".strip())
             self.updateGeometry()
 
     def minimumSizeHint(self) -> QSize:

@@ -66,6 +66,7 @@ class Look(QObject):
             font.setWeight(QFont.Weight.DemiBold if role in SEMIBOLD else QFont.Weight.Normal)
             font.setFeature(QFont.Tag("tnum"), 1)
             if role == "head":
+                font.setCapitalization(QFont.Capitalization.AllUppercase)
                 font.setLetterSpacing(QFont.SpacingType.AbsoluteSpacing, 1.1 * self.zoom)
             self._fonts[role] = font
         return self._fonts[role]

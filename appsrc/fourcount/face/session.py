@@ -7,8 +7,8 @@ from typing import TYPE_CHECKING, NamedTuple
 from PySide6.QtCore import QObject, Signal
 
 from fourcount.record import editing
-from fourcount.record.outcome import CELLS, Outcome
-from fourcount.record.paper import Record
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices, Record
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
@@ -41,6 +41,7 @@ class Session(QObject):
         super().__init__(parent)
         self.record = record or Record()
         self.findings: OutcomeFindings | None = None
+        self._appraised: tuple[Outcome, Choices] | None = None
         self.view = 0
         self.awake = False
         self._past: list[Step] = []
@@ -84,14 +85,14 @@ class Session(QObject):
         if self._run == field:
             self._run = ""
 
-    def change_outcome(self, outcome: Outcome, field: str = "") -> None:
+    def change_outcome(self, outcome: Outcome) -> None:
         """Take a new outcome in view, as one step."""
-        self.change_record(self._with(outcome), field)
+        self.change_record(self._with(outcome))
 
-    def change_record(self, record: Record, field: str = "") -> None:
+    def change_record(self, record: Record) -> None:
         """Take a new record, as one step; nothing happens if it is equal."""
         if record != self.record:
-            self._past.append(Step(self.record, field))
+            self._past.append(Step(self.record, ""))
             self._run = ""
             self._take(record)
 
@@ -106,10 +107,18 @@ class Session(QObject):
     def announce(self) -> None:
         """Appraise the outcome in view and tell every view."""
         if self.awake:
-            from fourcount.appraisal.appraise import appraise
-
-            self.findings = appraise(self.outcome, self.record.choices, deferring=True)
+            self._appraise()
         self.changed.emit(self.record, self.findings)
+
+    def _appraise(self) -> None:
+        """Appraise what has changed; whole findings of an unchanged outcome stay."""
+        from fourcount.appraisal.appraise import appraise
+        from fourcount.appraisal.waiting import waits
+
+        asked = (self.outcome, self.record.choices)
+        if self.findings is None or asked != self._appraised or waits(self.findings):
+            self._appraised = asked
+            self.findings = appraise(*asked, deferring=True)
 
     def settle(self) -> None:
         """Compute at once whatever was to follow: what is copied holds every figure."""
@@ -141,4 +150,5 @@ class Session(QObject):
         target.append(Step(self.record, step.field))
         self.record = step.record
         self.announce()
-        self.focus_wanted.emit(step.field or CELLS[0])
+        if step.field:
+            self.focus_wanted.emit(step.field)

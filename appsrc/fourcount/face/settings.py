@@ -7,6 +7,7 @@ from pathlib import Path
 
 from PySide6.QtCore import QByteArray, QSettings, QStandardPaths
 
+from fourcount.face.look import APPEARANCES, ZOOMS
 from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices
 
 FOLDER_VARIABLE = "FOURCOUNT_SETTINGS_FOLDER"
@@ -14,7 +15,7 @@ FOLDER_VARIABLE = "FOURCOUNT_SETTINGS_FOLDER"
 
 
 def own_folder() -> Path:
-    """The folder for settings and the log of errors, made if it is not there."""
+    """The folder for settings and the log of errors; it is made when something is kept."""
     location = QStandardPaths.writableLocation(QStandardPaths.StandardLocation.GenericConfigLocation)
     return Path(os.environ.get(FOLDER_VARIABLE) or Path(location) / "fourcount")
 
@@ -32,12 +33,12 @@ class Settings:
             zoom = float(str(self._store.value("zoom", 1.0)))
         except ValueError:
             return 1.0
-        return zoom if 0.8 <= zoom <= 2.0 else 1.0
+        return zoom if ZOOMS[0] <= zoom <= ZOOMS[-1] else 1.0
 
     def appearance(self) -> str:
         """ "system", "light" or "dark"."""
         value = str(self._store.value("appearance", "system"))
-        return value if value in ("system", "light", "dark") else "system"
+        return value if value in APPEARANCES else APPEARANCES[0]
 
     def geometry(self) -> QByteArray:
         """The window's place and size as Qt saved them; empty at the first start."""

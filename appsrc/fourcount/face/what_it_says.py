@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Sequence
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import Signal
+from PySide6.QtCore import QTimer, Signal
 from PySide6.QtWidgets import QVBoxLayout, QWidget
 
 from fourcount.face.fields import ChoiceField
@@ -25,37 +25,43 @@ if TYPE_CHECKING:
     from fourcount.picture.scales import Scale
     from fourcount.wording.lines import MeasureLine
 
+WORKING_PAUSE = 120
+"""Milliseconds without a key after which an open working is computed anew."""
+
 
 class WhatItSays(QWidget):
     """Sentence, rows of measures, the choice of family and level.
 
     **Signals**
         family_chosen: a family of intervals was chosen. Carries its key.
-        level_chosen: a level was chosen. Carries its fraction as text.
+        level_chosen: a level was chosen. Carries its fraction.
     """
 
-    family_chosen = Signal(str)
-    level_chosen = Signal(str)
+    family_chosen = Signal(object)
+    level_chosen = Signal(object)
 
     def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
         super().__init__()
         self._look = look
+        self.setAccessibleName(labels.COLUMNS["says"])
         self._rows: dict[str, MeasureRow] = {}
         self._order: Sequence[str] = ()
+        self._working_timer = QTimer(self)
+        self._working_timer.setSingleShot(True)
+        self._working_timer.setInterval(WORKING_PAUSE)
         self._head: ColumnHead | None = None
         self._open = ""
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self._show_more = False
         self.sentence = Words(look, "sentence", selectable=True)
         self.working = Words(look, "small", selectable=True)
-        self.working.setContentsMargins(12, 4, 0, 12)
         self.working.hide()
         self.family = ChoiceField(
-            look, "Intervals", tuple(labels.FAMILIES.items()), prefix=labels.INTERVALS_PREFIX, plain=True
+            look, labels.FIELDS["family"], tuple(labels.FAMILIES.items()), prefix=labels.INTERVALS_PREFIX, plain=True
         )
         self.level = ChoiceField(
             look,
-            "Confidence level",
+            labels.FIELDS["level"],
             tuple(labels.LEVELS.items()),
             prefix=labels.LEVEL_PREFIX,
             plain=True,
@@ -93,13 +99,12 @@ class WhatItSays(QWidget):
 
     def _show_choices(self, choices: Choices) -> None:
         self.family.show_choice(choices.family)
-        key = repr(choices.level)
-        if self.level.findData(key) < 0:
+        if self.level.findData(choices.level) < 0:
             from fourcount.wording import numbers
 
-            place = sum(float(self.level.itemData(i)) < choices.level for i in range(self.level.count()))
-            self.level.insertItem(place, numbers.level(choices.level), key)
-        self.level.show_choice(key)
+            place = sum(self.level.itemData(i) < choices.level for i in range(self.level.count()))
+            self.level.insertItem(place, numbers.level(choices.level), choices.level)
+        self.level.show_choice(choices.level)
 
     def _show_rows(self) -> None:
         if self._shown is None:
@@ -141,7 +146,10 @@ class WhatItSays(QWidget):
 
             level = numbers.level(self._shown[2].level)
             self._head.show_words(labels.INTERVAL_HEAD.format(level=level) if len(lines) > 1 else "")
-        self._show_working(shown)
+        if self._open in shown and not self.working.isHidden():
+            self._working_timer.start()  # while somebody types, an open working follows at the next pause
+        else:
+            self._show_working()
 
     def _row(self, key: str) -> MeasureRow:
         from fourcount.face.measure_row import ColumnHead, MeasureRow
@@ -170,9 +178,10 @@ class WhatItSays(QWidget):
             before = row
         QWidget.setTabOrder(before, self.family)
 
-    def _show_working(self, shown: set[str]) -> None:
+    def _show_working(self) -> None:
         """Put the working under its row; it is computed only while it is open."""
-        if self._open not in shown or self._shown is None:
+        self._working_timer.stop()
+        if self._open not in self._order or self._shown is None:
             self.working.hide()
             return
         from fourcount.wording.working import working
@@ -187,6 +196,7 @@ class WhatItSays(QWidget):
 
     def _on_row_toggled(self, key: str) -> None:
         self._open = "" if self._open == key else key
+        self.working.hide()
         self._show_rows()
 
     def _build(self) -> None:
@@ -199,7 +209,7 @@ class WhatItSays(QWidget):
         for link in self.copies:
             copies.addWidget(link)
         self._column = QVBoxLayout(self)
-        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["says"].upper(), wraps=False))
+        self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["says"], wraps=False))
         self._column.addWidget(self.sentence)
         self._column.addLayout(self._measures)
         self._column.addLayout(choosers)
@@ -210,6 +220,7 @@ class WhatItSays(QWidget):
         self._on_look_changed()
 
     def _connect_all(self) -> None:
+        self._working_timer.timeout.connect(self._show_working)
         self.family.chosen.connect(self.family_chosen)
         self.level.chosen.connect(self.level_chosen)
         self._look.changed.connect(self._on_look_changed)
@@ -218,6 +229,7 @@ class WhatItSays(QWidget):
         px = self._look.px
         self._column.setContentsMargins(px(24), px(20), px(24), px(16))
         self._column.setSpacing(px(12))
+        self.working.setContentsMargins(px(12), px(4), 0, px(12))
 
 
 def _scales(lines: Sequence[MeasureLine]) -> tuple[dict[str, Scale], dict[str, str]]:

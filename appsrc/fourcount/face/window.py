@@ -8,7 +8,7 @@ from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer, Signal
 from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QKeyEvent, QPaintEvent, QResizeEvent
-from PySide6.QtWidgets import QApplication, QLineEdit, QMainWindow, QVBoxLayout, QWidget
+from PySide6.QtWidgets import QApplication, QMainWindow, QVBoxLayout, QWidget
 
 from fourcount.face import actions as commands_table
 from fourcount.face import dialogs
@@ -16,6 +16,7 @@ from fourcount.face.as_printed import AsPrinted
 from fourcount.face.cautions_strip import CautionsStrip
 from fourcount.face.columns import Page, PageScroll
 from fourcount.face.commands import Commands
+from fourcount.face.fields import TextField
 from fourcount.face.for_one_patient import ForOnePatient
 from fourcount.face.header import Banner, Header
 from fourcount.face.later import Later
@@ -55,7 +56,6 @@ class MainWindow(QMainWindow):
         self._settings = settings
         self._later = later
         self._painted = False
-        self._at_start = session.record
         self.commands = Commands(session, look, self)
         self.actions_by_key = commands_table.make_actions(self)
         self.header = Header(look)
@@ -68,6 +68,7 @@ class MainWindow(QMainWindow):
         self._build()
         self._connect_all()
         self._show_state(session.record, None)
+        self._fields: list[TextField] = self.findChildren(TextField)
         self._set_tab_order()
         self.printed.grid.cells[CELLS[0]].setFocus()
 
@@ -161,16 +162,15 @@ class MainWindow(QMainWindow):
 
     # What is shown
 
-    def _show_state(self, record: Record, findings: object) -> None:
+    def _show_state(self, record: Record, findings: OutcomeFindings | None) -> None:
         """Show a record and its findings in every view; ask for what follows later."""
-        from_session = self.session.findings
         outcome = self.session.outcome
         self.header.show_state(record)
         self.header.notice.show_words("")
-        self.printed.show_state(outcome, from_session)
-        self.says.show_state(record, outcome, from_session)
-        self.patient.show_state(record, outcome, from_session)
-        self.cautions.show_state(from_session)
+        self.printed.show_state(outcome, findings)
+        self.says.show_state(record, outcome, findings)
+        self.patient.show_state(record, outcome, findings)
+        self.cautions.show_state(findings)
         self.actions_by_key["undo"].setEnabled(self.session.can_undo)
         self.actions_by_key["redo"].setEnabled(self.session.can_redo)
         title = record.title_text.strip()
@@ -244,12 +244,10 @@ class MainWindow(QMainWindow):
         if choices == self.session.record.choices:
             self.session.take_findings(outcome, findings)
 
-    def _on_focus_wanted(self, field: str) -> None:
-        if field == "choice":
-            return
-        for widget in self.findChildren(QLineEdit):
-            if getattr(widget, "field", "") == field:
-                widget.setFocus(Qt.FocusReason.OtherFocusReason)
+    def _on_focus_wanted(self, key: str) -> None:
+        for field in self._fields:
+            if field.field == key:
+                field.setFocus(Qt.FocusReason.OtherFocusReason)
 
     def _on_first_cell(self) -> None:
         cell = self.printed.grid.cells[CELLS[0]]

@@ -60,6 +60,15 @@ class Picture:
         self.words = words
         self.bars = bars or plan.denominator is None
 
+    def __eq__(self, other: object) -> bool:
+        """Whether both would be drawn alike."""
+        if not isinstance(other, Picture):
+            return NotImplemented
+        return (self.plan, self.words, self.bars) == (other.plan, other.words, other.bars)
+
+    def __hash__(self) -> int:
+        return hash((self.plan, self.words, self.bars))
+
     def height(self, style: Style, width: float) -> int:
         """Height of the picture at ``width``, both in logical pixels."""
         return round(self._run(None, style, 0, 0, width))

@@ -17,6 +17,10 @@ FIELDS = {
     "starting_risk_text": "Starting risk",
     "starting_risk_source_text": "Its source",
     "effect": "Effect used",
+    "family": "Intervals",
+    "level": "Confidence level",
+    "label": "Name of the {group}",
+    "heading": "Short name of the {column} outcome",
 }
 """Names of the fields, on screen and for a screen reader."""
 
@@ -52,7 +56,7 @@ LAYOUTS = {"down": "groups down", "across": "groups across"}
 FAMILIES = {"score": "score", "textbook": "textbook", "exact": "exact"}
 EFFECTS = {"risk_ratio": "risk ratio", "odds_ratio": "odds ratio"}
 EFFECT_KEPT = "{effect} {value}, kept constant"
-LEVELS = {"0.8": "80%", "0.9": "90%", "0.95": "95%", "0.98": "98%", "0.99": "99%", "0.999": "99.9%"}
+LEVELS = {0.8: "80%", 0.9: "90%", 0.95: "95%", 0.98: "98%", 0.99: "99%", 0.999: "99.9%"}
 INTERVALS_PREFIX = "Intervals: "
 LEVEL_PREFIX = "Level: "
 
