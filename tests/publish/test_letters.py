@@ -16,7 +16,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Gap
 from fourcount.publish.listing import WIDTH, listing
 from fourcount.publish.plain_text import one_line
-from fourcount.publish.prose import _paragraph, prose
+from fourcount.publish.prose import prose
 from fourcount.publish.sheet import HEAD, Row, html, rows, tsv
 from fourcount.record.outcome import CELLS, DESIGNS, EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import FAMILIES, Choices, Record
@@ -110,10 +110,54 @@ def test_a_shared_reason_is_said_once() -> None:
     assert " ".join(on_screen(outcome).split()).count(reason) == 1
 
 
-def test_what_several_texts_say_is_said_once() -> None:
-    """A text, or a last sentence, that comes again stands at its last place only; everything else stays."""
-    texts = ["Risk 17.1%. An average.", "Risk 9.2%. An average.", "No reason.", "", "No reason.", "Twice 17.1%."]
-    assert _paragraph(texts) == "Risk 17.1%. Risk 9.2%. An average. No reason. Twice 17.1%."
+LETTER = """\
+Falls · Night lights on a rehabilitation ward · invented example · table 2
+
+Usual care: 70 fell at least once, 339 did not fall. Night lights: 38 fell at least once, 374 did not fall.
+
+Of 100 people with usual care about 17 fell at least once within 12 months; of 100 with night lights about 9. That is \
+8 fewer, and could be as few as 3 or as many as 13 (95% interval).
+
+- Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409
+- Risk with night lights: 9.2% (95% interval 6.8 to 12.4%), 38 of 412
+- Difference: 7.9 fewer per 100 (95% interval 3.3 to 12.6)
+- NNTB 13 (95% interval 8 to 31) over 12 months
+- Risk ratio: 0.54 (95% interval 0.37 to 0.78), relative reduction 46%
+- Odds ratio: 0.49 (95% interval 0.32 to 0.75), as a risk ratio at 12%: 0.52 (0.35 to 0.77)
+- p < 0.001 by the (N−1) chi-square test of no association, two-sided. It does not say how large the effect is; the \
+intervals do.
+
+For one patient: starting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant. Of 100 people with \
+usual care 12 fell at least once within 12 months, of 100 with night lights 6: 6 fewer in 100 (95% interval 3 to 8). \
+NNTB at this starting risk 19 (14 to 38).
+"""
+
+
+def test_a_letter_reads_as_a_whole() -> None:
+    """Each thing is said once and in as few words as it takes: counts, headline, figures, the patient."""
+    patient = Patient(starting_risk_text="12%", starting_risk_source_text="ward audit 2025")
+    outcome = msgspec.structs.replace(OUTCOME, patient=patient)
+    text = prose(RECORD, outcome, appraise(outcome, RECORD.choices), version="9.9", today=date(2030, 5, 1))
+    start, rest = text.split("\nCautions:\n")
+    assert start == LETTER
+    assert rest.endswith("Calculated with Fourcount 9.9 on 2030-05-01; score intervals at 95%.\n")
+
+
+def test_a_letter_of_a_welcome_event_speaks_of_the_event() -> None:
+    """The patient's sentence counts what the headline counts."""
+    outcome = msgspec.structs.replace(
+        outcome_of((60, 40, 51, 49), risk="40%"), left_welcome=True, left_words_text="healed"
+    )
+    text = letter(outcome)
+    assert "Of 100 people in the reference group 40 healed, of 100 in the index group 47: 7 more in 100 (95%" in text
+    assert "NNTB at this starting risk" in text
+    assert letter(OUTCOME).count("For one patient: at the study’s own starting risk. The study’s figures hold") == 1
+
+
+def test_a_full_stop_in_a_name_breaks_no_sentence() -> None:
+    """Typed at the end of a name, it stands nowhere inside a sentence of ours."""
+    text = letter(outcome_of((38, 374, 70, 339), label="Name.", risk="12%"))
+    assert not re.search(r"Name\. [a-z(0-9]|Name\.[,:;)]|Name\.\.", text, re.IGNORECASE)
 
 
 def test_a_given_starting_risk_is_in_every_export() -> None:
@@ -131,11 +175,11 @@ def test_every_copy_says_what_the_patients_figures_rest_on() -> None:
     """The starting risk, its source and the effect carried to it are in the letter, the sheet and the listing."""
     patient = Patient(starting_risk_text="12%", starting_risk_source_text="ward audit 2025")
     outcome = msgspec.structs.replace(OUTCOME, patient=patient)
-    rests = "Starting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant."
+    rests = "tarting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant."
     assert rests in letter(outcome)
     assert rests in " ".join(on_screen(outcome).split())
     assert sum(rests in row[0] for row in table_of(outcome)) == 1
-    assert "At the study’s own starting risk." in letter(OUTCOME)
+    assert "at the study’s own starting risk." in letter(OUTCOME)
 
 
 def test_long_names_leave_the_figures_in_their_columns() -> None:

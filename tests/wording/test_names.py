@@ -34,6 +34,16 @@ def test_a_group_is_with_its_treatment_in_a_trial_and_by_name_elsewhere(outcome_
     assert names.in_group(cohort, "index") == "in the group “Smokers”"
 
 
+@pytest.mark.parametrize(
+    ("typed", "text"), [(" fell. ", "fell"), ("aspirin b.i.d.", "aspirin b.i.d."), (".", ""), ("St. John", "St. John")]
+)
+def test_a_closing_full_stop_does_not_end_our_sentence(outcome_of, typed, text):
+    """It goes, unless the name has another one and so is an abbreviation."""
+    assert names.bare(typed) == text
+    assert names.label(outcome_of(first_label_text=typed), "index") == (text or "index group")
+    assert names.event_words(outcome_of(left_words_text=typed)) == (text or "had the event “fell”")
+
+
 def test_a_group_without_a_label_has_a_stand_in(outcome_of):
     """The index group and the reference group, in every design."""
     outcome = outcome_of(first_label_text=" ", second_label_text="", design="cohort")

@@ -118,9 +118,9 @@ SENTENCES = {
         " risk."
     ),
     "number_needed": (
-        "NNTB 13: for every 13 people with night lights rather than with usual care over 12 months, one fewer "
-        "fell at least once, on average, from a risk of 17.1% with usual care (95% interval 8 to 31). It does not"
-        " say who it is, nor that the others gain or lose nothing."
+        "NNTB 13 (95% interval 8 to 31): for every 13 people with night lights rather than with usual care over 12 "
+        "months, one fewer fell at least once, on average, from a risk of 17.1% with usual care. It does not say who "
+        "it is, nor that the others gain or lose nothing."
     ),
     "risk_index": (
         "38 of 412 people with night lights fell at least once within 12 months: 9.2% (95% interval 6.8 to "

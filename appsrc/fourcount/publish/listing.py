@@ -6,6 +6,7 @@ from collections.abc import Iterable
 from textwrap import fill
 
 from fourcount.appraisal.findings import Gap, OutcomeFindings
+from fourcount.publish.letter_figures import withheld_lines
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
@@ -30,7 +31,7 @@ def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
         [
             _wrapped(headline(outcome, findings, choices)),
             _figures([line for line in lines if not line.withheld], choices),
-            *_withheld([line for line in lines if line.withheld]),
+            *map(_wrapped, withheld_lines([line for line in lines if line.withheld])),
             _wrapped(p_sentence(findings)),
             _patient(outcome, findings, choices),
             _cautions(findings),
@@ -55,14 +56,6 @@ def _figures(lines: list[MeasureLine], choices: Choices) -> str:
         written += [_wrapped(below), whole if fits else figures.rstrip()]
         written += [_wrapped("" if fits else row[3], INDENT), _wrapped(note, INDENT)]
     return "\n".join(line for line in written if line)
-
-
-def _withheld(lines: list[MeasureLine]) -> list[str]:
-    """Each reason once, behind the measures that it withholds."""
-    reasons: dict[str, list[str]] = {}
-    for line in lines:
-        reasons.setdefault(line.withheld, []).append(line.name)
-    return [_wrapped(f"{'; '.join(names)}: {reason}") for reason, names in reasons.items()]
 
 
 def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:

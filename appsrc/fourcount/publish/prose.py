@@ -1,4 +1,4 @@
-"""The findings of one outcome in sentences, as plain text to be pasted into a letter."""
+"""The findings of one outcome as plain text to be pasted into a letter: short, each thing said once."""
 
 from __future__ import annotations
 
@@ -6,17 +6,17 @@ from collections.abc import Iterable
 from datetime import date
 
 from fourcount.appraisal.findings import Gap, OutcomeFindings, PatientFindings
+from fourcount.publish.letter_figures import figure_lines
+from fourcount.publish.made_with import made_with
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels, names, numbers
+from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
-from fourcount.wording.patient import patient_words
-from fourcount.wording.sentence import headline, measure_sentence, p_sentence
-
-ABSOLUTE = ("risk_reference", "risk_index", "risk_difference", "number_needed")
-RELATIVE = ("risk_ratio", "odds_ratio")
-MADE_WITH = "Calculated with Fourcount {version} on {date}; {family} intervals at {level}."
+from fourcount.wording.patient import picture_heading
+from fourcount.wording.patient_sentence import patient_sentence
+from fourcount.wording.sentence import headline, p_sentence
 
 
 def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version: str, today: date) -> str:
@@ -25,36 +25,18 @@ def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, versio
     ``version`` and ``today`` are given by whoever asks: this room looks at no clock.
     """
     choices = record.choices
-    level = numbers.level(choices.level)
-    made = MADE_WITH.format(version=version, date=today.isoformat(), family=choices.family, level=level)
+    patient = one_line(_patient(outcome, findings, choices))
     paragraphs = [
-        one_line(_title(record, outcome)),
-        *(one_line(paragraph) for paragraph in _study(outcome, findings, choices)),
-        one_line(_patient(outcome, findings, choices)),
-        _cautions(findings),
+        one_line(picture_heading(record, outcome)),
+        one_line(_counts(outcome, findings)),
+        one_line(headline(outcome, findings, choices)),
+        _figures(outcome, findings, choices),
+        patient,
+        _cautions(findings, patient),
         one_line(" ".join(STANDING_FULL)),
-        one_line(made),
+        made_with(choices, version, today),
     ]
     return "\n\n".join(paragraph for paragraph in paragraphs if paragraph) + "\n"
-
-
-def _title(record: Record, outcome: Outcome) -> str:
-    parts = (outcome.name_text, record.title_text, record.source_text)
-    return ". ".join(line.rstrip(".") for part in parts if (line := one_line(part)))
-
-
-def _study(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> list[str]:
-    """What the study's table says; one sentence where it is not whole yet."""
-    if isinstance(findings.counts, Gap):
-        return [headline(outcome, findings, choices)]
-    absolute = [measure_sentence(key, outcome, findings, choices) for key in ABSOLUTE]
-    relative = [measure_sentence(key, outcome, findings, choices) for key in RELATIVE]
-    return [
-        _counts(outcome, findings),
-        headline(outcome, findings, choices),
-        _paragraph(absolute),
-        _paragraph([*(text for text in relative if text not in absolute), p_sentence(findings)]),
-    ]
 
 
 def _counts(outcome: Outcome, findings: OutcomeFindings) -> str:
@@ -74,24 +56,26 @@ def _counts(outcome: Outcome, findings: OutcomeFindings) -> str:
     )
 
 
+def _figures(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """A list of one line for every measure, and the p."""
+    if isinstance(findings.counts, Gap):
+        return ""
+    return _list((*figure_lines(outcome, findings, choices), p_sentence(findings)))
+
+
 def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     if not isinstance(findings.patient, PatientFindings):
         return ""
-    words = patient_words(outcome, findings, choices, None)
-    return f"{labels.COLUMNS['patient']}: {words.basis} {words.picture_sentence} {words.detail}"
+    rests, said = basis(outcome, findings.patient), patient_sentence(outcome, findings, choices)
+    return f"{labels.COLUMNS['patient']}: {names.mid_sentence(rests)} {said}"
 
 
-def _cautions(findings: OutcomeFindings) -> str:
-    """A list, the only paragraph of several lines."""
-    bullets = [f"- {one_line(caution_text(caution))}" for caution in findings.cautions]
-    return "\n".join([f"{labels.COLUMNS['cautions']}:", *bullets]) if bullets else ""
+def _cautions(findings: OutcomeFindings, said: str) -> str:
+    """The cautions that hold, without what was ``said`` just before."""
+    texts = [one_line(caution_text(caution)) for caution in findings.cautions]
+    bullets = _list(text for text in texts if text not in said)
+    return f"{labels.COLUMNS['cautions']}:\n{bullets}" if bullets else ""
 
 
-def _paragraph(texts: Iterable[str]) -> str:
-    """The texts in one paragraph. What several of them say, or end with, is said once, at the last of them."""
-    said = [text for text in dict.fromkeys(texts) if text]
-    for place, text in enumerate(said):
-        start = text.rfind(". ") + 1
-        if start and any(later.endswith(text[start:]) for later in said[place + 1 :]):
-            said[place] = text[:start]
-    return " ".join(said)
+def _list(texts: Iterable[str]) -> str:
+    return "\n".join(f"- {one_line(text)}" for text in texts)

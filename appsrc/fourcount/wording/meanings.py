@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings
+from fourcount.appraisal.findings import Figure, Gap, AnyNumberNeeded, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
@@ -34,23 +34,24 @@ def difference(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, cho
     )
 
 
-def number_needed(outcome: Outcome, needed: NumberNeeded, findings: OutcomeFindings, choices: Choices) -> str:
+def number_needed(outcome: Outcome, needed: AnyNumberNeeded, findings: OutcomeFindings, choices: Choices) -> str:
     """The number with its comparison, its time, the risk it starts from, and what it does not say."""
     groups = f"{names.in_group(outcome, 'index')} rather than {names.in_group(outcome, 'reference')}"
     span = names.over_span(outcome) or f"({lines.NO_SPAN})"
-    interval = f"{numbers.level(choices.level)} interval {limits.number_needed_interval(needed)}"
+    interval = f"({numbers.level(choices.level)} interval {limits.number_needed_interval(needed)})"
     if needed.kind == "neither" or isinstance(findings.counts, Gap):
         return (
             "Both groups had the event equally often, so no number of people makes a difference of one "
-            f"({interval}). An interval through infinity is {COMPATIBLE_KINDS}."
+            f"{interval}. An interval through infinity is {COMPATIBLE_KINDS}."
         )
     figure = findings.measures["risk_difference"]
     change = _one(_estimate(figure) if isinstance(figure, Figure) else 0.0)
     people = lines.whole_needed(findings.counts)
     through = f" The interval runs through infinity: {COMPATIBLE_KINDS}." if needed.through_infinity else ""
+    event = names.event_words(outcome)
     return (
-        f"{needed.kind} {people}: for every {people} people {groups} {span}, {change} {names.event_words(outcome)}, "
-        f"on average, from {_reference_risk(outcome, findings)} ({interval}).{through} "
+        f"{needed.kind} {people} {interval}: for every {people} people {groups} {span}, {change} {event}, "
+        f"on average, from {_reference_risk(outcome, findings)}.{through} "
         "It does not say who it is, nor that the others gain or lose nothing."
     )
 

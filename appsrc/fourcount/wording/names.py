@@ -21,10 +21,16 @@ VERBS = ("did", "had", "was", "were", "got")  # a heading that begins so is a se
 PREPOSITIONS = ("within", "in", "at", "over", "after", "by", "during")
 
 
+def bare(text: str) -> str:
+    """Text without blanks round it and without a closing full stop, which would end our sentence ("b.i.d." stays)."""
+    text = text.strip()
+    return text[:-1].rstrip() if text.endswith(".") and text.count(".") == 1 else text
+
+
 def label(outcome: Outcome, group: Group) -> str:
-    """The group's label exactly as typed, or its stand-in."""
+    """The group's label as typed, or its stand-in."""
     text = outcome.index_label_text if group == "index" else outcome.reference_label_text
-    return text.strip() or STAND_INS[group]
+    return bare(text) or STAND_INS[group]
 
 
 def label_within(outcome: Outcome, group: Group) -> str:
@@ -61,7 +67,7 @@ def in_group(outcome: Outcome, group: Group) -> str:
 
 def event_words(outcome: Outcome) -> str:
     """The counted event as the reader's sentence says it: "fell at least once"."""
-    words, heading = outcome.event_words_text.strip(), outcome.event_heading_text.strip()
+    words, heading = bare(outcome.event_words_text), bare(outcome.event_heading_text)
     if words or not heading:
         return words or _unnamed_event(outcome)
     return heading if heading.split(" ", 1)[0].lower() in VERBS else NAMED_EVENT.format(heading=heading)
@@ -74,7 +80,7 @@ def other_words(outcome: Outcome) -> str:
 
 def event_key(outcome: Outcome) -> str:
     """The counted event in a picture's key."""
-    return outcome.event_heading_text.strip() or outcome.event_words_text.strip() or _unnamed_event(outcome)
+    return bare(outcome.event_heading_text) or bare(outcome.event_words_text) or _unnamed_event(outcome)
 
 
 def other_key(outcome: Outcome) -> str:
@@ -89,11 +95,11 @@ def _unnamed_event(outcome: Outcome) -> str:
 
 
 def _event_name(outcome: Outcome) -> str:
-    return outcome.event_words_text.strip() or outcome.event_heading_text.strip()
+    return bare(outcome.event_words_text) or bare(outcome.event_heading_text)
 
 
 def _other_name(outcome: Outcome) -> str:
-    return outcome.other_words_text.strip() or outcome.other_heading_text.strip()
+    return bare(outcome.other_words_text) or bare(outcome.other_heading_text)
 
 
 def _other_column(outcome: Outcome) -> Column:
@@ -102,7 +108,7 @@ def _other_column(outcome: Outcome) -> Column:
 
 def within_span(outcome: Outcome) -> str:
     """The time span after a verb: "within 12 months", or "" where none was typed; a survey has no "within"."""
-    span = outcome.span_text.strip()
+    span = bare(outcome.span_text)
     if not span or _begins_with_preposition(span):
         return span
     return f"({span})" if outcome.design == "survey" else f"within {span}"
@@ -110,7 +116,7 @@ def within_span(outcome: Outcome) -> str:
 
 def over_span(outcome: Outcome) -> str:
     """The time span under a figure: "over 12 months", or "" where none was typed."""
-    span = outcome.span_text.strip()
+    span = bare(outcome.span_text)
     return span if not span or _begins_with_preposition(span) else f"over {span}"
 
 

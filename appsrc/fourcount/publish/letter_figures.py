@@ -1,0 +1,80 @@
+"""One short line of a letter for every measure, with its interval; what is withheld once for each reason."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.wording import limits, lines, names, numbers
+from fourcount.wording.gaps import gap_text
+from fourcount.wording.lines import MeasureLine, measure_lines
+
+ORDER = ("risk_reference", "risk_index", "risk_difference", "number_needed", "risk_ratio", "odds_ratio")
+"""Absolute before relative."""
+
+
+def figure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[str, ...]:
+    """The lines of a whole table: "Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409"."""
+    shown = {line.key: line for line in measure_lines(outcome, findings, choices)}
+    level = f"{numbers.level(choices.level)} interval"
+    given, withheld = [], []
+    for key in ORDER:
+        measure = findings.measures[key]
+        if isinstance(measure, Gap):
+            withheld.append(shown[key])
+        elif isinstance(measure, NumberNeeded):
+            given.append(_number_needed(shown[key], measure, outcome, level))
+        else:
+            given.append(_figure(key, shown[key], outcome, findings, level))
+    return (*given, *withheld_lines(withheld))
+
+
+def withheld_lines(withheld: list[MeasureLine]) -> tuple[str, ...]:
+    """Each reason once, behind the measures that it withholds."""
+    reasons: dict[str, list[str]] = {}
+    for line in withheld:
+        reasons.setdefault(line.withheld, []).append(line.name)
+    return tuple(f"{'; '.join(measures)}: {reason}" for reason, measures in reasons.items())
+
+
+def _number_needed(line: MeasureLine, needed: NumberNeeded, outcome: Outcome, level: str) -> str:
+    kind = "NNT" if needed.kind == "neither" else needed.kind
+    span = names.over_span(outcome)
+    return f"{kind} {line.estimate} ({level} {line.interval}){f' {span}' if span else f', {lines.NO_SPAN}'}"
+
+
+def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFindings, level: str) -> str:
+    figure = findings.measures[key]
+    if not isinstance(figure, Figure):
+        raise TypeError(key)
+    interval = "" if isinstance(figure.interval, Gap) else f" ({level} {line.interval})"
+    unit = " per 100" if key == "risk_difference" and not isinstance(figure.estimate, Gap) else ""
+    parts = (f"{_name(key, line, outcome)}: {line.estimate}{unit}{interval}", *_more(key, figure, outcome, findings))
+    reasons = dict.fromkeys(gap_text(part) for part in (figure.estimate, figure.interval) if isinstance(part, Gap))
+    return ". ".join((", ".join(part for part in parts if part), *reasons))
+
+
+def _name(key: str, line: MeasureLine, outcome: Outcome) -> str:
+    """A risk is named with its group as the sentences name it."""
+    risk = names.sentence_case(names.risk_name(outcome))
+    if key == "risk_reference":
+        return f"{risk} {names.in_group(outcome, 'reference')}"
+    return f"{risk} {names.in_group(outcome, 'index')}" if key == "risk_index" else line.name
+
+
+def _more(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings) -> tuple[str, ...]:
+    """What stands behind a figure: its counts, its relative words, what it is at a starting risk, a correction."""
+    counts = findings.counts
+    if isinstance(counts, Gap):
+        return ()
+    adjusted = isinstance(figure.interval, Gap) or figure.interval.adjusted is None
+    more = ["" if adjusted else lines.HALF_ADDED]
+    if key == "risk_reference":
+        more.append(f"{numbers.whole(counts.reference_events)} of {numbers.whole(counts.reference_total)}")
+    if key == "risk_index":
+        more.append(f"{numbers.whole(counts.index_events)} of {numbers.whole(counts.index_total)}")
+    if key == "risk_ratio" and not isinstance(figure.estimate, Gap):
+        more.append(limits.relative(figure.estimate))
+    if key == "odds_ratio":
+        more.append(lines.conversion_text(findings.conversion, names.risk_name(outcome)))
+    return tuple(more)
