@@ -53,14 +53,22 @@ def outcome_of(counts: tuple[int, ...], *, design: str = "trial", risk: str = ""
     )
 
 
+def record_of(outcome: Outcome, choices: Choices | None = None) -> Record:
+    return Record(title_text="A paper", outcomes=(outcome,), choices=choices or Choices())
+
+
 def letter(outcome: Outcome, choices: Choices | None = None) -> str:
-    record = Record(title_text="A paper", outcomes=(outcome,), choices=choices or Choices())
+    record = record_of(outcome, choices)
     return prose(record, outcome, appraise(outcome, record.choices), version="9.9", today=date(2030, 5, 1))
 
 
 def table_of(outcome: Outcome, choices: Choices | None = None) -> tuple[Row, ...]:
-    chosen = choices or Choices()
-    return rows(outcome, appraise(outcome, chosen), chosen)
+    record = record_of(outcome, choices)
+    return rows(record, outcome, appraise(outcome, record.choices), version="9.9", today=date(2030, 5, 1))
+
+
+def sheet_of(outcome: Outcome) -> str:
+    return tsv(record_of(outcome), outcome, appraise(outcome, Choices()), version="9.9", today=date(2030, 5, 1))
 
 
 def on_screen(outcome: Outcome, choices: Choices | None = None) -> str:
@@ -90,7 +98,7 @@ def test_every_export_carries_the_cautions(design: str) -> None:
     """Each caution that holds, and the standing block, is in the letter, the sheet and the listing."""
     outcome = outcome_of((3, 97, 0, 100), design=design, risk="12%")
     findings = appraise(outcome, Choices())
-    texts = [letter(outcome), tsv(outcome, findings, Choices()), " ".join(on_screen(outcome).split())]
+    texts = [letter(outcome), sheet_of(outcome), " ".join(on_screen(outcome).split())]
     assert findings.cautions
     for caution in findings.cautions:
         assert all(one_line(caution_text(caution)) in text for text in texts)
@@ -165,7 +173,7 @@ def test_a_given_starting_risk_is_in_every_export() -> None:
     outcome = outcome_of((38, 374, 70, 339), risk="12%")
     assert "For one patient" in letter(outcome)
     assert "For one patient" in on_screen(outcome)
-    assert sum(row[0].startswith("For one patient, 12%") for row in table_of(outcome) if row[1]) == 4
+    assert sum(row[0].startswith("For one patient, 12%") for row in table_of(outcome) if row[1]) == 5
     assert any(row[0] == "For one patient, 12%: NNTB" for row in table_of(outcome))
     assert not any(row[0].startswith("For one patient") for row in table_of(OUTCOME))
     assert "For one patient" not in on_screen(OUTCOME)
@@ -221,6 +229,25 @@ def test_a_sheet_holds_unrounded_numbers() -> None:
     assert float(found["p, two-sided"][1]) == pytest.approx(0.000829, abs=5e-7)
 
 
+def test_a_sheet_says_what_it_is_about_and_who_made_it() -> None:
+    """Name, title and source under the head where they were typed; version, date and intervals at the end."""
+    findings = appraise(OUTCOME, RECORD.choices)
+    first, *table = rows(RECORD, OUTCOME, findings, version="9.9", today=date(2030, 5, 1))
+    assert first == HEAD
+    assert [row[0] for row in table[:3]] == [OUTCOME.name_text, RECORD.title_text, RECORD.source_text]
+    assert table[-1][0] == "Calculated with Fourcount 9.9 on 2030-05-01; score intervals at 95%."
+    assert table_of(outcome_of((1, 2, 3, 4)))[1][0] == "A paper"
+
+
+def test_a_sheet_names_its_counts_and_both_risks_of_a_patient() -> None:
+    """People of each group with the event, and all; the risk without beside the risk with."""
+    found = {row[0]: row for row in table_of(outcome_of((38, 374, 70, 339), risk="12%"))}
+    assert found["People in the reference group who had the event"][1] == "70"
+    assert found["People in the index group, all"][1] == "412"
+    assert found["For one patient, 12%: risk without"][1:4] == ("0.12", "", "")
+    assert "People with night lights who fell at least once" in {row[0] for row in table_of(OUTCOME)}
+
+
 def test_a_limit_of_another_kind_names_it() -> None:
     """Where the number needed runs through infinity, the limit on the other side says its kind."""
     found = {row[0]: row for row in table_of(outcome_of((5, 5, 6, 4)))}
@@ -248,8 +275,7 @@ def test_every_table_can_be_exported(counts: tuple[int, ...], design: str, famil
 def test_what_was_typed_cannot_break_out(label: str) -> None:
     """No label becomes a formula, a new cell or a new row, nor moves a terminal's cursor."""
     outcome = outcome_of((38, 374, 70, 339), label=label, risk="12%")
-    findings = appraise(outcome, Choices())
-    sheet = tsv(outcome, findings, Choices())
+    sheet = sheet_of(outcome)
     lines = sheet.split("\n")
     assert lines.pop() == ""
     assert len(lines) == len(table_of(outcome))
@@ -265,7 +291,8 @@ def test_what_was_typed_cannot_break_out(label: str) -> None:
 def test_a_table_of_html_escapes_what_was_typed() -> None:
     """Markup in a label is text, and the table has the sheet's cells and nothing else."""
     outcome = outcome_of((38, 374, 70, 339), label='<b onclick="x">&')
-    table = html(outcome, appraise(outcome, Choices()), Choices())
+    findings = appraise(outcome, Choices())
+    table = html(record_of(outcome), outcome, findings, version="9.9", today=date(2030, 5, 1))
     assert set(re.findall("<[^>]*>", table)) == {
         f"<{end}{tag}>" for end in ("", "/") for tag in ("table", "tr", "th", "td")
     }

@@ -35,7 +35,8 @@ def test_a_group_is_with_its_treatment_in_a_trial_and_by_name_elsewhere(outcome_
 
 
 @pytest.mark.parametrize(
-    ("typed", "text"), [(" fell. ", "fell"), ("aspirin b.i.d.", "aspirin b.i.d."), (".", ""), ("St. John", "St. John")]
+    ("typed", "text"),
+    [(" fell. ", "fell"), ("aspirin b.i.d.", "aspirin b.i.d."), (".", ""), ("St.\n John", "St. John")],
 )
 def test_a_closing_full_stop_does_not_end_our_sentence(outcome_of, typed, text):
     """It goes, unless the name has another one and so is an abbreviation."""

@@ -33,9 +33,9 @@ def copy_table(session: Session) -> bool:
 
     if session.findings is None or not _whole(session):
         return False
-    data = QMimeData()
-    data.setText(tsv(session.outcome, session.findings, session.record.choices))
-    data.setHtml(html(session.outcome, session.findings, session.record.choices))
+    data, today = QMimeData(), date.today()
+    data.setText(tsv(session.record, session.outcome, session.findings, version=__version__, today=today))
+    data.setHtml(html(session.record, session.outcome, session.findings, version=__version__, today=today))
     QGuiApplication.clipboard().setMimeData(data)
     return True
 

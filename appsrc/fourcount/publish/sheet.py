@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from datetime import date
 from html import escape
 from math import isinf
 
@@ -10,15 +11,15 @@ from fourcount.appraisal.findings import (
     Counts,
     Figure,
     Gap,
-    NumberNeeded,
     NumberNeededLimit,
     OutcomeFindings,
     PatientFindings,
     Range,
 )
 from fourcount.publish.plain_text import one_line
+from fourcount.publish.made_with import made_with
 from fourcount.record.outcome import Outcome
-from fourcount.record.paper import Choices
+from fourcount.record.paper import Record
 from fourcount.wording import labels, lines, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
@@ -40,16 +41,19 @@ PATIENT = "{column}, {baseline}: {name}"
 _TAKEN_FOR_MORE = ("=", "+", "-", "@", "\uff1d", "\uff0b", "\uff0d", "\uff20", "\u2212", '"', "'")
 
 
-def rows(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
-    """The head, the counts, every measure, p, the patient and the cautions; the same five columns throughout.
+def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version: str, today: date) -> tuple[Row, ...]:
+    """What it is about, the counts, every measure, p, the patient, the cautions, the version; five columns throughout.
 
     A figure that is not given has blank cells, and the reason stands under "method". Only cells that hold a number
     may begin with a minus sign: all others are text to a spreadsheet, whatever the reader typed.
     """
     cautions = [caution_text(caution) for caution in findings.cautions]
+    choices = record.choices
     table = (
+    about = (outcome.name_text, record.title_text, record.source_text)
         HEAD,
         *_counts(outcome, findings.counts),
+        *(_text(text) for text in about if text.strip()),
         *(_measure(line.name, findings.measures[line.key]) for line in lines.measure_lines(outcome, findings, choices)),
         _p(findings),
         *_converted(findings.conversion),
@@ -58,17 +62,19 @@ def rows(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple
         _text(UNROUNDED.format(level=numbers.level(choices.level))),
         *(_text(sentence) for sentence in STANDING_FULL),
     )
+        _text(made_with(choices, version, today)),
     return tuple((_safe(name), estimate, low, high, _safe(method)) for name, estimate, low, high, method in table)
 
 
-def tsv(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+def tsv(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version: str, today: date) -> str:
     """The rows with tabs between their cells: what a spreadsheet takes from the clipboard."""
-    return "".join("\t".join(row) + "\n" for row in rows(outcome, findings, choices))
+    table = rows(record, outcome, findings, version=version, today=today)
+    return "".join("\t".join(row) + "\n" for row in table)
 
 
-def html(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+def html(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version: str, today: date) -> str:
     """The rows as a table of HTML, which a word processor takes from the clipboard; all text is escaped."""
-    head, *body = rows(outcome, findings, choices)
+    head, *body = rows(record, outcome, findings, version=version, today=today)
     return f"<table>{_html_row(head, 'th')}{''.join(_html_row(row, 'td') for row in body)}</table>"
 
 
@@ -86,9 +92,9 @@ def _counts(outcome: Outcome, counts: Counts | Gap) -> tuple[Row, ...]:
     )
     table: list[Row] = []
     for group, events, total in groups:
-        label = names.label(outcome, group)
-        table.append((f"People in the group {label} who {names.event_words(outcome)}", str(events), "", "", ""))
-        table.append((f"People in the group {label}, all", str(total), "", "", ""))
+        people = f"People {names.in_group(outcome, group)}"
+        table.append((f"{people} who {names.event_words(outcome)}", str(events), "", "", ""))
+        table.append((f"{people}, all", str(total), "", "", ""))
     return tuple(table)
 
 
@@ -153,6 +159,7 @@ def _patient(outcome: Outcome, patient: PatientFindings | Gap) -> tuple[Row, ...
         _figure(named("difference"), patient.difference),
         _measure(named(kind), needed),
         _figure(named("risk ratio"), patient.risk_ratio),
+        _figure(named("risk without"), patient.without),
     )
 
 

@@ -22,8 +22,8 @@ PREPOSITIONS = ("within", "in", "at", "over", "after", "by", "during")
 
 
 def bare(text: str) -> str:
-    """Text without blanks round it and without a closing full stop, which would end our sentence ("b.i.d." stays)."""
-    text = text.strip()
+    """Text on one line, without a closing full stop, which would end our sentence ("b.i.d." stays)."""
+    text = " ".join(text.split())
     return text[:-1].rstrip() if text.endswith(".") and text.count(".") == 1 else text
 
 
