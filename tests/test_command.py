@@ -210,3 +210,22 @@ def test_a_narrow_terminal_encoding_loses_no_figure(monkeypatch: pytest.MonkeyPa
     said = narrow.buffer.getvalue().decode("ascii")  # type: ignore[attr-defined]
     assert "study?s" in said
     assert "95% interval" in said
+
+
+@pytest.mark.skipif(sys.platform == "win32", reason="a shell of POSIX closes the streams")
+@pytest.mark.parametrize(
+    ("arguments", "status", "said"),
+    [
+        ("answer 1 2 3 4 >&-", 1, "There is no standard output to write to."),
+        ("--help >&-", 1, "There is no standard output to write to."),
+        ("answer 1 2 3 x 2>&-", 2, ""),
+        ("answer 1 2 3 x 2>/dev/full", 2, ""),
+    ],
+)
+def test_closed_streams_end_in_a_status_and_no_traceback(arguments: str, status: int, said: str) -> None:
+    """Whatever stream is closed or full, the status is the command's own and nothing else is said."""
+    command_line = f'"{sys.executable}" -m fourcount {arguments}'
+    done = subprocess.run(["/bin/sh", "-c", command_line], capture_output=True, text=True, check=False)
+    assert done.returncode == status
+    assert done.stdout == ""
+    assert done.stderr.strip() == (f"fourcount: {said}" if said else "")

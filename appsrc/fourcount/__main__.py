@@ -54,7 +54,7 @@ def main(arguments: Sequence[str] | None = None) -> int:
     try:
         return _run(given)
     except MistypedError as mistake:
-        print(f"fourcount: {mistake}", file=sys.stderr)
+        _complain(str(mistake))
         return MISTYPED
 
 
@@ -174,7 +174,7 @@ def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
 
 def _open_window() -> int:
     if sys.platform.startswith("linux") and not _display_in(os.environ):
-        print(f"fourcount: {NO_DISPLAY}", file=sys.stderr)
+        _complain(NO_DISPLAY)
         return FAILED
     import fourcount.face.running_start  # noqa: F401 - before Qt is loaded
     from fourcount.face.application import run
@@ -189,6 +189,9 @@ def _display_in(environment: Mapping[str, str]) -> bool:
 
 def _say(text: str) -> int:
     """Write to stdout at once, so that what stops it is noticed here and not while Python ends."""
+    if sys.stdout is None:  # closed by whoever started the command
+        _complain("There is no standard output to write to.")
+        return FAILED
     if "utf" not in (sys.stdout.encoding or "utf").lower() and hasattr(sys.stdout, "reconfigure"):
         sys.stdout.reconfigure(errors="replace")
     try:
@@ -199,9 +202,20 @@ def _say(text: str) -> int:
         return FAILED
     except OSError as trouble:
         _let_go_of(sys.stdout)
-        print(f"fourcount: Nothing could be written: {trouble.strerror or trouble}.", file=sys.stderr)
+        _complain(f"Nothing could be written: {trouble.strerror or trouble}.")
         return FAILED
     return GOOD
+
+
+def _complain(sentence: str) -> None:
+    """Write one sentence to stderr, if there is one; the exit status says the same."""
+    if sys.stderr is None:
+        return
+    try:
+        sys.stderr.write(f"fourcount: {sentence}\n")
+        sys.stderr.flush()
+    except OSError:
+        _let_go_of(sys.stderr)
 
 
 def _let_go_of(stream: TextIO) -> None:

@@ -99,9 +99,9 @@ def asked(
 ) -> Question:
     """The question, each part of it checked; ValueError with one plain sentence otherwise."""
     whole = tuple(_count(value, name) for value, name in zip(counts, COUNT_NAMES, strict=True))
-    if design not in DESIGNS:
+    if not isinstance(design, str) or design not in DESIGNS:
         raise ValueError(f"The design must be one of {', '.join(DESIGNS)}, not {_shown(design)}.")
-    if intervals not in FAMILIES:
+    if not isinstance(intervals, str) or intervals not in FAMILIES:
         raise ValueError(f"The intervals must be one of {', '.join(FAMILIES)}, not {_shown(intervals)}.")
     if not isinstance(unwelcome, bool):
         raise ValueError(f"Whether the event is unwelcome must be True or False, not {_shown(unwelcome)}.")
