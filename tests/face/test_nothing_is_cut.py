@@ -40,7 +40,7 @@ def test_nothing_is_cut(open_window: Any, qtbot: Any, design: Design) -> None:
     outcome = editing.with_design(outcome, design)
     window = open_window(editing.with_outcome(record, 0, outcome))
     qtbot.waitUntil(lambda: "odds_ratio" in window.says._rows)
-    window.says._on_row_toggled("odds_ratio")
+    window.says._on_row_chosen("odds_ratio")
     for width, height in SIZES:
         for zoom in ZOOMS:
             window.resize(width, height)

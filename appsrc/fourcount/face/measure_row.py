@@ -4,9 +4,9 @@ from __future__ import annotations
 
 from typing import NamedTuple
 
-from PySide6.QtCore import QEvent, QRectF, QSize, Qt, Signal
-from PySide6.QtGui import QEnterEvent, QFocusEvent, QKeyEvent, QMouseEvent, QPainter, QPaintEvent
-from PySide6.QtWidgets import QSizePolicy, QWidget
+from PySide6.QtCore import QRectF, QSize, Qt, Signal
+from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent
+from PySide6.QtWidgets import QAbstractButton, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
 from fourcount.ink.strips import draw_strip
@@ -72,14 +72,14 @@ class ColumnHead(QWidget):
         self.update()
 
 
-class MeasureRow(QWidget):
+class MeasureRow(QAbstractButton):
     """A row that paints itself; Enter, Space or a click shows and hides its working.
 
     **Signals**
-        toggled: the row was pressed. Carries the measure's key.
+        chosen: the row was pressed. Carries the measure's key.
     """
 
-    toggled = Signal(str)
+    chosen = Signal(str)
 
     def __init__(self, look: Look, key: str) -> None:
         super().__init__()
@@ -94,6 +94,7 @@ class MeasureRow(QWidget):
         policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
         policy.setHeightForWidth(True)
         self.setSizePolicy(policy)
+        self.clicked.connect(self._on_clicked)
         look.changed.connect(self._on_look_changed)
 
     def show_line(
@@ -123,25 +124,17 @@ class MeasureRow(QWidget):
         return QSize(0, self._height(self.width()))
 
     def keyPressEvent(self, event: QKeyEvent) -> None:
-        if event.key() in (Qt.Key.Key_Return, Qt.Key.Key_Enter, Qt.Key.Key_Space):
-            self.toggled.emit(self.key)
+        if event.key() in (Qt.Key.Key_Return, Qt.Key.Key_Enter):
+            self.click()
             return
         super().keyPressEvent(event)
 
-    def mouseReleaseEvent(self, event: QMouseEvent) -> None:
-        if event.button() == Qt.MouseButton.LeftButton and self.rect().contains(event.position().toPoint()):
-            self.toggled.emit(self.key)
-
-    def enterEvent(self, event: QEnterEvent) -> None:
-        super().enterEvent(event)
-        self.update()
-
-    def leaveEvent(self, event: QEvent) -> None:
-        super().leaveEvent(event)
-        self.update()
-
     def focusInEvent(self, event: QFocusEvent) -> None:
         super().focusInEvent(event)
+        self.update()
+
+    def focusOutEvent(self, event: QFocusEvent) -> None:
+        super().focusOutEvent(event)
         self.update()
 
     def paintEvent(self, event: QPaintEvent) -> None:
@@ -255,6 +248,9 @@ class MeasureRow(QWidget):
         if painter is None:
             return text_height(text, font, width)
         return draw_text(painter, x, y, width, text, font, colour)
+
+    def _on_clicked(self) -> None:
+        self.chosen.emit(self.key)
 
     def _on_look_changed(self) -> None:
         self.updateGeometry()

@@ -156,7 +156,7 @@ class WhatItSays(QWidget):
 
         if key not in self._rows:
             row = MeasureRow(self._look, key)
-            row.toggled.connect(self._on_row_toggled)
+            row.chosen.connect(self._on_row_chosen)
             self._rows[key] = row
             if not self._measures.count():
                 self._head = ColumnHead(self._look)
@@ -194,7 +194,7 @@ class WhatItSays(QWidget):
         said = self._open == "test"  # its row is the sentence already
         self.working.show_words(rows if said else f"{text.sentence}\n\n{rows}")
 
-    def _on_row_toggled(self, key: str) -> None:
+    def _on_row_chosen(self, key: str) -> None:
         self._open = "" if self._open == key else key
         self.working.hide()
         self._show_rows()
