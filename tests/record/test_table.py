@@ -191,3 +191,28 @@ def test_every_table_gets_an_answer(
         if f"{position}_right_text" in unused:
             assert group.right is None
     assert len({mark.field for mark in reading.marks}) == len(reading.marks)
+
+
+@pytest.mark.parametrize(
+    ("cell", "value"),
+    [
+        ("38 374", 38_374),
+        (" 1 204 567 ", 1_204_567),
+        ("38 374 (9.1%)", 38_374),
+        ("9/38 374", 38_374),
+        ("38\u00a0374", None),
+        ("38\u202f374", None),
+        ("38\u2009374", None),
+        ("38,374", None),
+        ("38 of 374", None),
+        ("38 (9.2%)", None),
+    ],
+)
+def test_a_number_parted_by_an_ordinary_space_is_used_and_says_so(cell: str, value: int | None) -> None:
+    """It may have been meant as two counts; the spaces of print are no reason to ask."""
+    marks = [mark for mark in read_table(EventsAndOthers(first_left_text=cell)).marks if mark.key == "read-as"]
+    facts = {"text": " ".join(cell.split()), "value": value}
+    assert [(mark.field, mark.facts, mark.used) for mark in marks] == (
+        [("first_left_text", facts, True)] if value is not None else []
+    )
+    assert read_table(EventsAndOthers(first_left_text=cell)).first.left is not None

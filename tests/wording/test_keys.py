@@ -25,6 +25,7 @@ MARK_KEYS = (
     "events-above-total",
     "total-disagrees",
     "percent-disagrees",
+    "read-as",
     "not-a-risk",
     "percent-or-fraction",
     "risk-out-of-range",
@@ -96,6 +97,12 @@ def test_what_the_entry_cannot_read_is_explained(read, typed):
 def test_a_negative_count_is_refused_in_so_many_words():
     """The sentence names what is wrong."""
     assert gaps.mark_text(Mark(field="", key="negative", facts={"text": "-3"})) == "-3: a count cannot be negative"
+
+
+def test_a_count_in_two_parts_says_how_it_is_read():
+    """Two counts in one cell are never taken for one in silence."""
+    mark = Mark(field="", key="read-as", facts={"text": "38 374", "value": 38374})
+    assert gaps.mark_text(mark) == "38 374: read as 38,374; two counts need two cells"
 
 
 def test_a_long_text_is_quoted_short_and_on_one_line():

@@ -45,6 +45,7 @@ STAND_INS = {
     "total": "another number",
     "typed": "one number",
     "side": "one side",
+    "label": "comparison",
 }
 
 
@@ -78,6 +79,11 @@ def _written(name: str, value: Fact) -> str:
     return numbers.whole(value) if isinstance(value, int) else quoted(value)
 
 
+def _quantity(value: float) -> str:
+    """An effect, or a count of people."""
+    return numbers.whole(value) if isinstance(value, int) else numbers.ratio(value)
+
+
 def _count_word(value: int) -> str:
     return COUNT_WORDS[value] if 0 <= value < len(COUNT_WORDS) else numbers.whole(value)
 
@@ -97,7 +103,7 @@ WRITERS: dict[str, Callable[..., str]] = {
     "risk": numbers.percent,
     "odds_ratio": numbers.ratio,
     "risk_ratio": numbers.ratio,
-    "value": numbers.ratio,
+    "value": _quantity,
     "count": _count_word,
     "effect": _measure_name,
     "measure": _measure_name,

@@ -51,6 +51,7 @@ MARK_TEXTS = {
     "percent-disagrees": "{text}: {events} of {total} does not round to this percentage; the count is used",
     "not-a-risk": "{text}: a risk is needed, such as 12% or 12 in 100",
     "percent-or-fraction": "{text}: this could be a percentage or a fraction; write it with its sign, such as 12%",
+    "read-as": "{text}: read as {value}; two counts need two cells",
     "risk-out-of-range": "{text}: a risk lies between 0% and 100%",
     "not-a-level": "{text}: a confidence level is needed, such as 95%",
     "level-out-of-range": "{text}: a confidence level here lies between 80% and 99.9%",

@@ -16,6 +16,7 @@ _CELL = re.compile(
     r"(?: *\( *(?P<percent>[^()]+?) *\))?",
     re.IGNORECASE,
 )
+_SPACED = re.compile(r"\d{1,3}(?: \d{3})+")
 _NEGATIVE = re.compile(r"- ?[0-9.][0-9.,' ]*")
 _DECIMAL = re.compile(r"[0-9]*[.,\u00b7][0-9]+")
 
@@ -59,3 +60,13 @@ def _unreadable(key: str, text: str, **facts: Fact) -> Unreadable:
     if key == "too-large":
         facts["limit"] = LARGEST_COUNT
     return Unreadable(key=key, facts={"text": specimen(text), **facts})
+
+
+def spaced_number(text: str) -> int | None:
+    """The number that a readable cell parts with an ordinary space, ``38 374``; None where no number is parted so.
+
+    Print parts thousands with narrower or no-break spaces. A space bar's own space may as well part two counts that
+    were typed or pasted into one cell, so whoever reads the cell says how it was taken.
+    """
+    match = _SPACED.search(text)
+    return int(match[0].replace(" ", "")) if match else None

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.record.entry.cell import read_cell
+from fourcount.record.entry.cell import read_cell, spaced_number
 from fourcount.record.entry.digits import specimen
 from fourcount.record.entry.percent import printed_percent, rounds_to
 from fourcount.record.entry.readings import Blank, Count, Fact, GroupCounts, Mark, TableReading, Unreadable
@@ -25,6 +25,7 @@ def read_table(table: Table) -> TableReading:
     second, second_marks = row(table, cells, "second_left_text", "second_right_text")
     marks = first_marks + second_marks
     marks += _percentages(table, cells, first, second, {mark.field for mark in marks})
+    marks += _spaced(table, cells, {mark.field for mark in marks})
     return TableReading(
         first=first, second=second, marks=tuple(sorted(marks, key=lambda mark: CELLS.index(mark.field)))
     )
@@ -116,6 +117,17 @@ def _percentages(
             "total": group.total,
         }
         marks.append(Mark(field=field, key="percent-disagrees", facts=facts, used=True))
+    return tuple(marks)
+
+
+def _spaced(table: Table, cells: dict[str, Reading], marked: set[str]) -> tuple[Mark, ...]:
+    """Marks for counts that an ordinary space parts: they are used, and it is said as what."""
+    marks = []
+    for field, cell in cells.items():
+        value = spaced_number(getattr(table, field)) if isinstance(cell, Count) and field not in marked else None
+        if value is not None:
+            facts: dict[str, Fact] = {"text": specimen(getattr(table, field)), "value": value}
+            marks.append(Mark(field=field, key="read-as", facts=facts, used=True))
     return tuple(marks)
 
 
