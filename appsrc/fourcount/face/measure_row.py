@@ -32,7 +32,7 @@ class Places(NamedTuple):
 
 def places(look: Look, width: float) -> Places:
     """Share a row's width among its parts, alike in every row."""
-    strip_width = min(look.px(118), width * 0.3)
+    strip_width = min(look.px(124), width * 0.3)
     if width < look.px(ONE_LINE_FROM):
         return Places(width - strip_width - look.px(12), 0, 0, width - strip_width, strip_width, True)
     strip = width - strip_width
@@ -230,14 +230,15 @@ class MeasureRow(QAbstractButton):
         look = self._look
         font = look.font("small")
         low, middle, high = self._axis or ("", "", "")
-        tall = max(text_height(end, font, at.strip_width / 2 - look.px(4)) for end in (low, high))
+        colour, half = look.palette.muted, at.strip_width / 2 - look.px(4)
+        tall = max(text_height(end, font, half) for end in (low, high))
+        beside = sum(text_width(f"{part} ", font) for part in (low, middle, high)) < at.strip_width
         if painter:
-            colour, half = look.palette.muted, at.strip_width / 2 - look.px(4)
             draw_text(painter, at.strip, y, half, low, font, colour, LEFT)
             draw_text(painter, at.strip + at.strip_width - half, y, half, high, font, colour, RIGHT)
-            if sum(text_width(f"{part} ", font) for part in (low, middle, high)) < at.strip_width:
-                draw_text(painter, at.strip, y, at.strip_width, middle, font, colour, CENTRE)
-        return y + tall
+            below = y if beside else y + tall
+            draw_text(painter, at.strip, below, at.strip_width, middle, font, colour, CENTRE)
+        return y + tall + (0 if beside else text_height(middle, font, at.strip_width))
 
     def _text(
         self, painter: QPainter | None, x: float, y: float, width: float, text: str, role: Role, colour: str

@@ -8,7 +8,7 @@ from math import isfinite, log
 
 RISK_ENDS = (0.001, 0.0025, 0.005, 0.01, 0.025, 0.05, 0.1, 0.25, 0.5, 1.0)
 DIFFERENCE_ENDS = (0.001, 0.0025, 0.005, 0.01, 0.025, 0.05, 0.1, 0.15, 0.25, 0.5, 1.0)
-RATIO_ENDS = (2.0, 4.0, 10.0, 30.0, 100.0)
+RATIO_ENDS = (2.0, 4.0, 10.0, 50.0, 100.0)
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)

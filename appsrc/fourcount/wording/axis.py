@@ -1,15 +1,18 @@
-"""The words at the ends of a drawn strip's scale."""
+"""The words at the ends of a drawn strip's scale, and at no effect."""
 
 from __future__ import annotations
 
-FRACTIONS = {2.0: "½", 4.0: "¼"}
+from fourcount.wording import numbers
+
+RATIO_ENDS = {2.0: "½", 4.0: "¼", 10.0: "0.1", 50.0: "0.02", 100.0: "0.01"}
+"""How the low end of a scale of ratios is written, by its high end."""
 
 
 def axis_words(kind: str, end: float) -> tuple[str, str, str]:
     """Words for the low end, no effect and the high end of a scale that reaches to ``end``."""
     if kind == "difference":
-        reach = f"{100 * end:g}"
+        reach = numbers.percent_given(end).rstrip("%")
         return f"{reach} fewer", "0", f"{reach} more"
     if kind == "ratio":
-        return f"{FRACTIONS.get(end, f'{1 / end:.2g}')} fewer", "1", f"more {end:g}"
-    return "0", "", f"{100 * end:g}%"
+        return RATIO_ENDS[end], "fewer | more", numbers.whole(int(end))
+    return "0", "", numbers.percent_given(end)

@@ -30,7 +30,7 @@ HINTS = {
     "name_text": "“falls”",
     "words": "“fell at least once”",
     "span_text": "“12 months”",
-    "starting_risk_source_text": "a register, an audit · no patient details",
+    "starting_risk_source_text": "a register · no patient details",
     "label": "group name",
     "left_heading": "event",
     "right_heading": "no event",
