@@ -27,6 +27,7 @@ def facts(appraised):
 def test_the_keys_in_order():
     """What changes the reader's conclusion comes first."""
     assert list(dict.fromkeys(rule.key for rule in CAUTIONS)) == [
+        "read-as", "percent-disagrees",
         "odds-ratio-differs", "effect-kept-constant", "baseline-far", "baseline-uncertain", "rests-on-baseline",
         "controls-over-time", "observational", "converted-limits", "zero-cells", "half-added", "through-no-effect",
         "family-parts", "rare-harm", "leans",
@@ -282,3 +283,15 @@ def test_leans_to_fewer_by_odds_at_a_high_risk(facts):
 def test_leans_not_where_the_estimate_is_no_effect(facts):
     """An estimate of no difference has no side."""
     assert "leans" not in facts(10, 90, 10, 90, baseline="12%")
+
+
+def test_a_mark_that_is_used_is_a_caution(facts):
+    """A count that disagrees with its percentage, and one that a space parts, are told wherever cautions are."""
+    found = facts("38 (9.9%)", 374, "70 (20%)", "1 339")
+    assert [(f["text"], f["events"]) for f in found["percent-disagrees"]] == [("38 (9.9%)", 38), ("70 (20%)", 70)]
+    assert found["read-as"] == [{"text": "1 339", "value": 1339}]
+
+
+def test_a_cell_that_adds_up_is_no_caution(facts):
+    """A percentage that the count gives says nothing."""
+    assert facts("38 (9.2%)", 374, 70, 339) == {}

@@ -33,6 +33,9 @@ MARK_KEYS = (
     "level-out-of-range",
 )
 FACTS = {
+    "text": "38 (9.9%)",
+    "events": 38,
+    "total": 412,
     "odds_ratio": 0.4921,
     "risk_ratio": 0.5389,
     "effect": "risk_ratio",

@@ -65,7 +65,15 @@ def _with_counts(
     start = starting_risk(typed, risk(table.counts.reference_events, table.counts.reference_total), support)
     conversion, patient = _at(start, figures, outcome, support)
     test = own_test(table)
-    case = Case(outcome=outcome, table=table, figures=figures, test=test, conversion=conversion, patient=patient)
+    case = Case(
+        outcome=outcome,
+        table=table,
+        figures=figures,
+        test=test,
+        conversion=conversion,
+        patient=patient,
+        marks=marks,
+    )
     return OutcomeFindings(
         counts=table.counts,
         totals=totals,

@@ -4,7 +4,17 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from fourcount.appraisal.findings import Conversion, Counts, Figure, Gap, Interval, PatientFindings, Probability, Range
+from fourcount.appraisal.findings import (
+    Conversion,
+    Counts,
+    Figure,
+    Gap,
+    Interval,
+    Mark,
+    PatientFindings,
+    Probability,
+    Range,
+)
 from fourcount.appraisal.measures import Figures, Table
 from fourcount.record.outcome import Outcome
 
@@ -22,6 +32,7 @@ class Case:
     test: Probability
     conversion: Conversion | Gap
     patient: PatientFindings | Gap
+    marks: tuple[Mark, ...] = ()
 
     @property
     def counts(self) -> Counts:

@@ -11,6 +11,14 @@ RARE = 0.01
 """A harm under this risk is called rare here: 1%, common practice."""
 
 
+def used_though_marked(case: Case, *, key: str, field: str) -> Facts | None:
+    """A cell is marked and its count used all the same, which every copy has to say as the screen does."""
+    for mark in case.marks:
+        if mark.used and (mark.key, mark.field) == (key, field):
+            return dict(mark.facts)
+    return None
+
+
 def odds_ratio_differs(case: Case) -> Facts | None:
     """Odds ratio and risk ratio part by more than 20%, the larger against the smaller.
 

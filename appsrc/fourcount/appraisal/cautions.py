@@ -9,6 +9,7 @@ from functools import partial
 from fourcount.appraisal import caution_rules as rules
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.findings import Caution
+from fourcount.record.outcome import CELLS
 
 __all__ = ["CAUTIONS", "Case", "Rule", "cautions_for"]
 
@@ -23,6 +24,11 @@ class Rule:
 
 
 CAUTIONS: tuple[Rule, ...] = (
+    *(
+        Rule(key=key, holds=partial(rules.used_though_marked, key=key, field=field), source="common practice")
+        for key in ("read-as", "percent-disagrees")
+        for field in CELLS
+    ),
     Rule(
         key="odds-ratio-differs",
         holds=rules.odds_ratio_differs,

@@ -9,6 +9,11 @@ from fourcount.wording.standing import STANDING, STANDING_FULL
 __all__ = ["STANDING", "STANDING_FULL", "TEXTS", "caution_text", "caution_title"]
 
 TEXTS = {
+    "read-as": ("How a count was read", "{text} is read as {value}; two counts need two cells."),
+    "percent-disagrees": (
+        "A percentage in the print",
+        "{text}: {events} of {total} does not round to this percentage; the count is used.",
+    ),
     "odds-ratio-differs": (
         "Odds ratio and risk ratio",
         (
