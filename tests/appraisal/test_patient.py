@@ -5,11 +5,14 @@ from __future__ import annotations
 import math
 
 import pytest
+from hypothesis import given
+from hypothesis import strategies as st
 
-from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, Range
+from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, NumberNeededRange, Range
 from fourcount.appraisal.gating import SUPPORT
 from fourcount.appraisal.patient import carry
 from fourcount.appraisal.starting_risk import StartingRisk
+from fourcount.record.paper import FAMILIES
 
 TABLE = (38, 374, 70, 339)
 
@@ -126,7 +129,21 @@ def test_a_limit_that_passes_100_percent_is_withheld_alone():
     assert patient.with_.interval.high.key == "beyond-one"
     assert math.isclose(0.12, patient.difference.interval.low)
     assert patient.difference.interval.high.key == "beyond-one"
-    assert Gap("limit-withheld") == patient.number_needed
+    needed = patient.number_needed
+    assert isinstance(needed, NumberNeededRange)
+    assert (needed.kind, needed.through_infinity, needed.low) == ("NNTH", False, patient.difference.interval.high)
+    assert math.isclose(1 / 0.3, needed.estimate)
+    assert math.isclose(1 / 0.12, needed.high.value)
+
+
+@pytest.mark.parametrize("welcome", [False, True])
+def test_a_withheld_limit_still_decides_about_infinity(welcome):
+    """At 60% a risk ratio of 0.9 (0.3 to 2.5) runs from fewer through none to a limit beyond 100%."""
+    needed = at(0.6, "risk_ratio", 0.9, 0.3, 2.5, welcome=welcome).number_needed
+    assert needed.through_infinity
+    assert needed.kind == needed.low.kind == ("NNTH" if welcome else "NNTB")
+    assert math.isclose(1 / 0.42, needed.low.value)
+    assert needed.high.key == "beyond-one"
 
 
 def test_an_estimate_that_passes_100_percent_is_withheld():
@@ -161,7 +178,7 @@ def test_an_endless_effect_at_the_end_of_the_scale_is_undetermined(baseline, eff
 
 
 @pytest.mark.parametrize(
-    ("cells", "limit", "key"), [((1, 9, 5, 5), "low", "beyond-zero"), ((9, 1, 5, 5), "high", "beyond-one")]
+    ("cells", "limit", "key"), [((1, 9, 5, 5), "low", "beyond-zero"), ((9, 1, 5, 5), "high", "formula-beyond-one")]
 )
 def test_a_limit_of_the_table_that_is_no_risk_is_withheld_from_the_patient(appraised, cells, limit, key):
     """Wald's limit of 1/10 is below 0 and that of 9/10 above 100%: the study's row shows it, the patient's does not."""
@@ -169,6 +186,41 @@ def test_a_limit_of_the_table_that_is_no_risk_is_withheld_from_the_patient(appra
     assert not 0 <= getattr(findings.measures["risk_index"].interval, limit) <= 1
     assert Gap(key) == getattr(findings.patient.with_.interval, limit)
     assert findings.measures["risk_difference"] == findings.patient.difference
+
+
+# By hand: Wald's limits of 2/50 v 500/5,000 are 0.0400 - 0.1 - 1.96 sqrt(0.000768 + 0.000018) = -0.1149 and -0.0051,
+# and those of the risks -0.0143 to 0.0943 and 0.0917 to 0.1083.
+def test_a_difference_that_the_two_risks_cannot_reach_is_withheld_from_the_patient(appraised):
+    """11.5 fewer per 100 of at most 10.8: the study's row shows it, the patient's range and number needed do not."""
+    findings = appraised(2, 48, 500, 4500, family="textbook")
+    shown = findings.measures["risk_difference"].interval
+    assert (round(shown.low, 4), round(shown.high, 4)) == (-0.1149, -0.0051)
+    patient = findings.patient
+    assert Range(low=Gap("formula-beyond-risks"), high=shown.high) == patient.difference.interval
+    assert (patient.number_needed.kind, patient.number_needed.low) == ("NNTB", Gap("formula-beyond-risks"))
+    assert findings.measures["number_needed"].low.value == -1 / shown.low
+
+
+def test_a_difference_beyond_everybody_has_no_number_needed_there(appraised):
+    """10/10 v 1/10 by Wald reaches 1.086: the study's row keeps it, and no number needed is under one person."""
+    findings = appraised(10, 0, 1, 9, family="textbook")
+    assert round(findings.measures["risk_difference"].interval.high, 3) == 1.086
+    needed = findings.measures["number_needed"]
+    assert (needed.kind, needed.low) == ("NNTH", Gap("formula-beyond-risks"))
+    assert Gap("formula-beyond-risks") == findings.patient.difference.interval.high
+
+
+@given(
+    cells=st.tuples(*[st.integers(0, 60)] * 4), family=st.sampled_from(FAMILIES), level=st.sampled_from([0.8, 0.999])
+)
+def test_no_number_needed_is_under_one_person(appraised, cells, family, level):
+    """By any family, in the study and for a patient, at the limits as at the estimate."""
+    findings = appraised(*cells, family=family, level=level)
+    patient = findings.patient
+    for needed in (findings.measures["number_needed"], Gap("") if isinstance(patient, Gap) else patient.number_needed):
+        if not isinstance(needed, Gap):
+            limits = [limit.value for limit in (needed.low, needed.high) if not isinstance(limit, Gap)]
+            assert min(needed.estimate, *limits) >= 1 - 1e-12
 
 
 def test_a_welcome_event_turns_the_kind_of_the_number_needed(appraised):

@@ -50,6 +50,14 @@ def test_the_interval_says_its_level(outcome_of, findings_of):
     assert ", 90% interval " in words.picture_sentence
 
 
+def test_an_interval_past_everybody_is_not_put_into_people(outcome_of, findings_of):
+    """Nobody is told of "as many as 106" of 100 people: the clause is left out, and why is said."""
+    outcome, choices = outcome_of((9, 1, 1, 9)), Choices(family="textbook")
+    assert headline(outcome, findings_of(outcome, choices), choices).endswith(
+        "That is 80 more. The bare formula’s 95% interval reaches past 100 in 100, so it is not put into people."
+    )
+
+
 def test_equal_risks_are_said_to_be_equal(outcome_of, findings_of):
     """The same number, and still an interval."""
     outcome = outcome_of((10, 90, 10, 90))

@@ -6,10 +6,19 @@ import math
 
 import pytest
 
-from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, NumberNeededLimit, Range
+from fourcount.appraisal.findings import (
+    Figure,
+    Gap,
+    Interval,
+    NumberNeeded,
+    NumberNeededLimit,
+    NumberNeededRange,
+    Range,
+)
 from fourcount.record.outcome import EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import Choices
 from fourcount.wording import limits
+from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines import SCREEN_ORDER, measure_lines
 
 
@@ -196,6 +205,47 @@ def test_a_number_needed_runs_through_infinity(low, high, through, text):
     first, second = (NumberNeededLimit(value=value, kind=kind) for value, kind in (low, high))
     needed = NumberNeeded(estimate=20.0, kind="NNTB", low=first, high=second, through_infinity=through)
     assert limits.number_needed_interval(needed) == text
+
+
+WITHHELD = Gap("beyond-one")
+
+
+@pytest.mark.parametrize(
+    ("kind", "low", "high", "through", "text"),
+    [
+        ("NNTH", WITHHELD, (28.0, "NNTH"), False, "up to 28; the lower limit is withheld"),
+        ("NNTH", WITHHELD, (9.0, "NNTB"), True, "NNTH, limit withheld, to ∞ to NNTB 9"),
+        ("NNTB", (3.0, "NNTB"), WITHHELD, True, "NNTB 3 to ∞ to NNTH, limit withheld"),
+        ("neither", (3.0, "NNTB"), WITHHELD, True, "NNTB 3 to ∞ to NNTH, limit withheld"),
+        ("neither", (math.inf, "NNTH"), WITHHELD, False, "from ∞; the upper limit is withheld"),
+    ],
+)
+def test_a_withheld_limit_of_a_number_needed_is_said_to_be(kind, low, high, through, text):
+    """The estimate's other limit stays, and each side keeps its kind."""
+    first, second = (
+        end if isinstance(end, Gap) else NumberNeededLimit(value=end[0], kind=end[1]) for end in (low, high)
+    )
+    needed = NumberNeededRange(estimate=20.0, kind=kind, low=first, high=second, through_infinity=through)
+    assert limits.number_needed_interval(needed) == text
+
+
+def test_a_limit_beyond_everybody_is_said_beside_the_row(outcome_of, findings_of):
+    """Wald's limits stand as papers print them, and the row says that nothing lies there."""
+    lines = lines_of(outcome_of((9, 1, 1, 9)), findings_of, Choices(family="textbook"))
+    assert lines["risk_index"].note == "the bare formula reaches beyond 100%"
+    assert lines["risk_reference"].note == "the bare formula reaches below 0%"
+    assert (lines["risk_difference"].interval, lines["risk_difference"].note) == (
+        "53.7 to 106.3",
+        "the bare formula reaches past 100 in 100",
+    )
+    assert lines["number_needed"].interval == "up to 2; the lower limit is withheld"
+    assert lines["number_needed"].note == gap_text(Gap("formula-beyond-risks"))
+
+
+def test_no_limit_is_said_to_lie_beyond_where_none_does(outcome_of, findings_of):
+    """The score family's limits are possible whatever the table."""
+    lines = lines_of(outcome_of((9, 1, 1, 9)), findings_of)
+    assert all("formula" not in line.note for line in lines.values())
 
 
 @pytest.mark.parametrize(

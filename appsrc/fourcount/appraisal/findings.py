@@ -11,8 +11,9 @@ from fourcount.stats.number_needed import Kind, NumberNeeded, NumberNeededLimit
 from fourcount.stats.results import Counts, Fact, Gap, Interval
 
 __all__ = [
-    "Caution", "Conversion", "Counts", "Fact", "Figure", "Gap", "Interval", "Kind", "Mark",
-    "NumberNeeded", "NumberNeededLimit", "OutcomeFindings", "PatientFindings", "Probability", "Range", "Totals",
+    "AnyNumberNeeded", "Caution", "Conversion", "Counts", "Fact", "Figure", "Gap", "Interval", "Kind", "Mark",
+    "NumberNeeded", "NumberNeededLimit", "NumberNeededRange", "OutcomeFindings", "PatientFindings",
+    "Probability", "Range", "Totals",
 ]  # fmt: skip
 
 MEASURES = (
@@ -39,7 +40,8 @@ GAP_KEYS = (
     "baseline-unreadable",  # the typed starting risk gives no risk
     "carried-gap",  # the effect to carry has no value
     "bare-starting-risk",  # the starting risk is a bare value without an interval of its own
-    "limit-withheld",  # one limit of the difference is withheld, so the number needed has no interval
+    "formula-beyond-one",  # a limit of the bare textbook formula passes 100%, where no risk of a patient lies
+    "formula-beyond-risks",  # a limit of the bare textbook formula parts two risks farther than they can lie apart
 )
 """Every reason this folder gives for withholding a figure, beside those of ``stats.results.GAP_KEYS``."""
 
@@ -53,6 +55,23 @@ class Range(msgspec.Struct, frozen=True, kw_only=True):
     low: float | Gap
     high: float | Gap
     adjusted: str | None = None
+
+
+class NumberNeededRange(msgspec.Struct, frozen=True, kw_only=True):
+    """A number needed of which exactly one limit cannot be given, since the difference has none there.
+
+    All else is as in ``NumberNeeded``: a withheld limit of the difference lies beyond 0 on its own side, so that it
+    decides about infinity as a limit in its place would.
+    """
+
+    estimate: float
+    kind: Kind
+    low: NumberNeededLimit | Gap
+    high: NumberNeededLimit | Gap
+    through_infinity: bool
+
+
+AnyNumberNeeded = NumberNeeded | NumberNeededRange
 
 
 class Figure(msgspec.Struct, frozen=True, kw_only=True):
@@ -101,7 +120,7 @@ class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
     without: Figure
     with_: Figure
     difference: Figure
-    number_needed: NumberNeeded | Gap
+    number_needed: AnyNumberNeeded | Gap
     risk_ratio: Figure
     range_from: Literal["table", "effect"]
 
@@ -137,7 +156,7 @@ class OutcomeFindings(msgspec.Struct, frozen=True, kw_only=True):
     counts: Counts | Gap
     totals: Totals
     marks: tuple[Mark, ...]
-    measures: dict[str, Figure | NumberNeeded | Gap]
+    measures: dict[str, Figure | AnyNumberNeeded | Gap]
     test: Probability | Gap
     conversion: Conversion | Gap
     patient: PatientFindings | Gap

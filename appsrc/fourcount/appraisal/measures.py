@@ -7,8 +7,20 @@ from collections.abc import Callable, Mapping
 from dataclasses import dataclass
 from types import MappingProxyType
 
-from fourcount.appraisal.findings import MEASURES, Counts, Figure, Gap, Interval, NumberNeeded, Probability
+from fourcount.appraisal.findings import (
+    MEASURES,
+    AnyNumberNeeded,
+    Counts,
+    Figure,
+    Gap,
+    Interval,
+    NumberNeededLimit,
+    NumberNeededRange,
+    Probability,
+    Range,
+)
 from fourcount.appraisal.gating import Support
+from fourcount.appraisal.reach import within_everybody
 from fourcount.record.paper import Choices
 from fourcount.stats import estimates
 from fourcount.stats.methods import FAMILIES, method, test
@@ -31,31 +43,52 @@ def all_figures(table: Table, support: Support) -> Figures:
     return {key: compute(table) for key, compute in _FIGURES.items() if key not in support.withheld}
 
 
-def measures(figures: Figures, support: Support, *, welcome: bool) -> dict[str, Figure | NumberNeeded | Gap]:
+def measures(figures: Figures, support: Support, *, welcome: bool) -> dict[str, Figure | AnyNumberNeeded | Gap]:
     """All keys of ``MEASURES`` in order: the figure, the number needed, or the reason why neither is given."""
     return {key: _measure(key, figures, support, welcome=welcome) for key in MEASURES}
 
 
-def _measure(key: str, figures: Figures, support: Support, *, welcome: bool) -> Figure | NumberNeeded | Gap:
+def _measure(key: str, figures: Figures, support: Support, *, welcome: bool) -> Figure | AnyNumberNeeded | Gap:
     if key in support.withheld:
         return Gap(support.withheld[key])
     if key == "number_needed":
-        return number_needed_from(figures["risk_difference"], welcome=welcome)
+        return number_needed_from(within_everybody(figures["risk_difference"]), welcome=welcome)
     figure = figures[key]
     if isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap):
         return figure.estimate
     return figure
 
 
-def number_needed_from(difference: Figure, *, welcome: bool) -> NumberNeeded | Gap:
-    """The number needed to treat from a difference and its interval (Altman 1998), if both are whole."""
-    if isinstance(difference.estimate, Gap):
-        return difference.estimate
-    if isinstance(difference.interval, Gap):
-        return difference.interval
-    if not isinstance(difference.interval, Interval):
-        return Gap("limit-withheld")
-    return number_needed(difference.estimate, difference.interval, unwelcome=not welcome)
+def number_needed_from(difference: Figure, *, welcome: bool) -> AnyNumberNeeded | Gap:
+    """The number needed to treat from a difference and its interval (Altman 1998).
+
+    Where one limit of the difference is withheld, so is the limit that would be its reciprocal, and nothing else.
+    """
+    estimate, interval = difference.estimate, difference.interval
+    if isinstance(estimate, Gap):
+        return estimate
+    if isinstance(interval, Range):
+        return _half_known(estimate, interval, welcome=welcome)
+    return interval if isinstance(interval, Gap) else number_needed(estimate, interval, unwelcome=not welcome)
+
+
+def _half_known(difference: float, interval: Range, *, welcome: bool) -> NumberNeededRange:
+    """An endless limit stands in for the one withheld: it lies on the same side, and its reciprocal is 0."""
+    low = -math.inf if isinstance(interval.low, Gap) else interval.low
+    high = math.inf if isinstance(interval.high, Gap) else interval.high
+    reason = interval.low if isinstance(interval.low, Gap) else interval.high
+    needed = number_needed(difference, Interval(low=low, high=high), unwelcome=not welcome)
+
+    def given(limit: NumberNeededLimit) -> NumberNeededLimit | Gap:
+        return reason if isinstance(reason, Gap) and limit.value == 0 else limit
+
+    return NumberNeededRange(
+        estimate=needed.estimate,
+        kind=needed.kind,
+        low=given(needed.low),
+        high=given(needed.high),
+        through_infinity=needed.through_infinity,
+    )
 
 
 def own_test(table: Table) -> Probability:

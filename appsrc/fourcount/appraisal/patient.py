@@ -3,9 +3,10 @@
 from __future__ import annotations
 
 from fourcount.appraisal.conversion import converted_figure, mapped
-from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, PatientFindings
+from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, PatientFindings
 from fourcount.appraisal.gating import Support
 from fourcount.appraisal.measures import Figures, number_needed_from
+from fourcount.appraisal.reach import risk_within_reach, within_reach
 from fourcount.appraisal.starting_risk import StartingRisk
 from fourcount.record.outcome import Effect
 from fourcount.stats.conversion import risk_with
@@ -30,15 +31,16 @@ def _from_table(
     """
     if isinstance(figures["risk_index"].estimate, Gap):
         return Gap("carried-gap")
+    difference = within_reach(figures["risk_difference"], figures["risk_index"], figures["risk_reference"])
     return PatientFindings(
         baseline=start.value,
         baseline_from="reference",
         effect=effect,
         carried=figures[effect],
-        without=mapped(figures["risk_reference"], _as_risk),
-        with_=mapped(figures["risk_index"], _as_risk),
-        difference=figures["risk_difference"],
-        number_needed=_gated(figures["risk_difference"], support, welcome=welcome),
+        without=risk_within_reach(figures["risk_reference"]),
+        with_=risk_within_reach(figures["risk_index"]),
+        difference=difference,
+        number_needed=_gated(difference, support, welcome=welcome),
         risk_ratio=figures["risk_ratio"],
         range_from="table",
     )
@@ -78,14 +80,7 @@ def _from_effect(
     )
 
 
-def _gated(difference: Figure, support: Support, *, welcome: bool) -> NumberNeeded | Gap:
+def _gated(difference: Figure, support: Support, *, welcome: bool) -> AnyNumberNeeded | Gap:
     if support.patient_number_needed is not None:
         return Gap(support.patient_number_needed)
     return number_needed_from(difference, welcome=welcome)
-
-
-def _as_risk(value: float) -> float | Gap:
-    """A limit of the bare textbook formula can lie outside 0 to 100%: it is no risk of a patient."""
-    if value < 0:
-        return Gap("beyond-zero")
-    return Gap("beyond-one") if value > 1 else value

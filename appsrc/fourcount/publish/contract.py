@@ -11,12 +11,12 @@ from math import inf
 
 from fourcount.appraisal.every import conditional_odds_ratio, every_method, every_test
 from fourcount.appraisal.findings import (
+    AnyNumberNeeded,
     Conversion,
     Counts,
     Figure,
     Gap,
     Interval,
-    NumberNeeded,
     NumberNeededLimit,
     OutcomeFindings,
     PatientFindings,
@@ -79,10 +79,10 @@ def _adjusted(methods: Mapping[str, Interval | Gap]) -> dict[str, str]:
     }
 
 
-def _measure(measure: Figure | NumberNeeded | Gap) -> Json:
+def _measure(measure: Figure | AnyNumberNeeded | Gap) -> Json:
     if isinstance(measure, Gap):
         return _withheld(measure)
-    return _number_needed(measure) if isinstance(measure, NumberNeeded) else _figure(measure)
+    return _number_needed(measure) if isinstance(measure, AnyNumberNeeded) else _figure(measure)
 
 
 def _figure(figure: Figure) -> Json:
@@ -102,7 +102,7 @@ def _pair(interval: Interval | Gap) -> object:
     return _withheld(interval) if isinstance(interval, Gap) else [_value(interval.low), _value(interval.high)]
 
 
-def _number_needed(needed: NumberNeeded) -> Json:
+def _number_needed(needed: AnyNumberNeeded) -> Json:
     return {
         "estimate": _value(needed.estimate),
         "kind": needed.kind,
@@ -112,7 +112,9 @@ def _number_needed(needed: NumberNeeded) -> Json:
     }
 
 
-def _number_needed_limit(limit: NumberNeededLimit) -> Json:
+def _number_needed_limit(limit: NumberNeededLimit | Gap) -> Json:
+    if isinstance(limit, Gap):
+        return _withheld(limit)
     return {"value": _value(limit.value), "kind": limit.kind}
 
 

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, OutcomeFindings
+from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
@@ -22,7 +22,7 @@ def figure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) 
         measure = findings.measures[key]
         if isinstance(measure, Gap):
             withheld.append(shown[key])
-        elif isinstance(measure, NumberNeeded):
+        elif isinstance(measure, AnyNumberNeeded):
             given.append(_number_needed(shown[key], measure, outcome, level))
         else:
             given.append(_figure(key, shown[key], outcome, findings, level))
@@ -37,7 +37,7 @@ def withheld_lines(withheld: list[MeasureLine]) -> tuple[str, ...]:
     return tuple(f"{'; '.join(measures)}: {reason}" for reason, measures in reasons.items())
 
 
-def _number_needed(line: MeasureLine, needed: NumberNeeded, outcome: Outcome, level: str) -> str:
+def _number_needed(line: MeasureLine, needed: AnyNumberNeeded, outcome: Outcome, level: str) -> str:
     kind = "NNT" if needed.kind == "neither" else needed.kind
     span = names.over_span(outcome)
     return f"{kind} {line.estimate} ({level} {line.interval}){f' {span}' if span else f', {lines.NO_SPAN}'}"

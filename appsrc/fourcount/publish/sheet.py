@@ -7,6 +7,7 @@ from html import escape
 from math import isinf
 
 from fourcount.appraisal.findings import (
+    AnyNumberNeeded,
     Conversion,
     Counts,
     Figure,
@@ -16,8 +17,8 @@ from fourcount.appraisal.findings import (
     PatientFindings,
     Range,
 )
-from fourcount.publish.plain_text import one_line
 from fourcount.publish.made_with import made_with
+from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
 from fourcount.wording import labels, lines, names, numbers
@@ -47,13 +48,13 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
     A figure that is not given has blank cells, and the reason stands under "method". Only cells that hold a number
     may begin with a minus sign: all others are text to a spreadsheet, whatever the reader typed.
     """
-    cautions = [caution_text(caution) for caution in findings.cautions]
     choices = record.choices
-    table = (
+    cautions = [caution_text(caution) for caution in findings.cautions]
     about = (outcome.name_text, record.title_text, record.source_text)
+    table = (
         HEAD,
-        *_counts(outcome, findings.counts),
         *(_text(text) for text in about if text.strip()),
+        *_counts(outcome, findings.counts),
         *(_measure(line.name, findings.measures[line.key]) for line in lines.measure_lines(outcome, findings, choices)),
         _p(findings),
         *_converted(findings.conversion),
@@ -61,8 +62,8 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
         *(_text(caution) for caution in cautions),
         _text(UNROUNDED.format(level=numbers.level(choices.level))),
         *(_text(sentence) for sentence in STANDING_FULL),
-    )
         _text(made_with(choices, version, today)),
+    )
     return tuple((_safe(name), estimate, low, high, _safe(method)) for name, estimate, low, high, method in table)
 
 
@@ -98,10 +99,10 @@ def _counts(outcome: Outcome, counts: Counts | Gap) -> tuple[Row, ...]:
     return tuple(table)
 
 
-def _measure(name: str, measure: Figure | NumberNeeded | Gap) -> Row:
+def _measure(name: str, measure: Figure | AnyNumberNeeded | Gap) -> Row:
     if isinstance(measure, Gap):
         return (name, "", "", "", gap_text(measure))
-    return _number_needed(name, measure) if isinstance(measure, NumberNeeded) else _figure(name, measure)
+    return _number_needed(name, measure) if isinstance(measure, AnyNumberNeeded) else _figure(name, measure)
 
 
 def _figure(name: str, figure: Figure) -> Row:
@@ -115,14 +116,17 @@ def _figure(name: str, figure: Figure) -> Row:
     return (name, _number(figure.estimate), _number(low), _number(high), method)
 
 
-def _number_needed(name: str, needed: NumberNeeded) -> Row:
+def _number_needed(name: str, needed: AnyNumberNeeded) -> Row:
     through = THROUGH_INFINITY if needed.through_infinity else ""
     low, high = _needed_limit(needed.low, needed), _needed_limit(needed.high, needed)
-    return (name, _number(needed.estimate), low, high, through)
+    reasons = (gap_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap))
+    return (name, _number(needed.estimate), low, high, "; ".join(part for part in (through, *reasons) if part))
 
 
-def _needed_limit(limit: NumberNeededLimit, needed: NumberNeeded) -> str:
-    """A limit with its own kind in front where that is not the estimate's."""
+def _needed_limit(limit: NumberNeededLimit | Gap, needed: AnyNumberNeeded) -> str:
+    """A limit with its own kind in front where that is not the estimate's; blank where it is withheld."""
+    if isinstance(limit, Gap):
+        return ""
     value = _number(limit.value)
     return value if limit.kind in (needed.kind, "neither") else f"{limit.kind} {value}"
 
@@ -155,11 +159,11 @@ def _patient(outcome: Outcome, patient: PatientFindings | Gap) -> tuple[Row, ...
 
     return (
         _text(named(basis(outcome, patient))),
+        _figure(named("risk without"), patient.without),
         _figure(named("risk with"), patient.with_),
         _figure(named("difference"), patient.difference),
         _measure(named(kind), needed),
         _figure(named("risk ratio"), patient.risk_ratio),
-        _figure(named("risk without"), patient.without),
     )
 
 

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, NumberNeeded, PatientFindings
+from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, PatientFindings
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, numbers
 from fourcount.wording.gaps import gap_text, limit_text
@@ -74,7 +74,7 @@ def interval(patient: PatientFindings, choices: Choices, people: int) -> str:
     return f"{numbers.level(choices.level)} interval {interval}" if interval else ""
 
 
-def number_needed(needed: NumberNeeded | Gap) -> str:
+def number_needed(needed: AnyNumberNeeded | Gap) -> str:
     """The number needed of this column, told apart from that of the study."""
     if isinstance(needed, Gap):
         return gap_text(needed)

@@ -31,7 +31,9 @@ GAP_TEXTS = {
     "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
     "undetermined-at-baseline": "An effect of 0 or infinity says nothing at a starting risk of 0% or 100%.",
     "bare-starting-risk": "The starting risk was typed without a range of its own.",
-    "limit-withheld": "One limit of the difference cannot be given, so the number needed has no interval.",
+    "formula-beyond-one": "The bare formula’s limit passes 100%, where no risk lies; the score intervals do not.",
+    "formula-beyond-risks": "The bare formula’s limit parts the two risks farther than they can lie apart; "
+    "the score intervals do not.",
 }
 LIMIT_TEXTS = {
     "beyond-one": "The upper limit of the risk would pass 100%, so the interval is open there; "
@@ -49,9 +51,9 @@ MARK_TEXTS = {
     "events-above-total": "{text}: more events than people; the events have to fit into the total",
     "total-disagrees": "{text}: the total here is {typed}, but the group’s total is {total}; check the paper",
     "percent-disagrees": "{text}: {events} of {total} does not round to this percentage; the count is used",
+    "read-as": "{text}: read as {value}; two counts need two cells",
     "not-a-risk": "{text}: a risk is needed, such as 12% or 12 in 100",
     "percent-or-fraction": "{text}: this could be a percentage or a fraction; write it with its sign, such as 12%",
-    "read-as": "{text}: read as {value}; two counts need two cells",
     "risk-out-of-range": "{text}: a risk lies between 0% and 100%",
     "not-a-level": "{text}: a confidence level is needed, such as 95%",
     "level-out-of-range": "{text}: a confidence level here lies between 80% and 99.9%",

@@ -4,12 +4,15 @@ from __future__ import annotations
 
 from collections.abc import Callable
 
-from fourcount.appraisal.findings import Gap, Interval, NumberNeeded, NumberNeededLimit, Range
+from fourcount.appraisal.findings import AnyNumberNeeded, Gap, Interval, NumberNeededLimit, Range
 from fourcount.wording import numbers
 
 AnyInterval = Interval | Range | Gap
 
+ROUNDING = 1e-12
 NO_LIMIT = "no limit"
+LIMIT_WITHHELD = "limit withheld"
+LIMIT_IS_WITHHELD = "limit is withheld"
 FEWER = "fewer"
 MORE = "more"
 LOWER = "lower"
@@ -19,6 +22,17 @@ HIGHER = "higher"
 def side(difference: float) -> str:
     """The word for the side of a difference: fewer or more."""
     return FEWER if difference < 0 else MORE
+
+
+def beyond(interval: AnyInterval, least: float, most: float) -> str:
+    """Which ends lie outside of what is possible, as the bare textbook formula's can: "low", "high", "both" or ""."""
+    if isinstance(interval, Gap):
+        return ""
+    below = not isinstance(interval.low, Gap) and interval.low < least - ROUNDING
+    above = not isinstance(interval.high, Gap) and interval.high > most + ROUNDING
+    if below and above:
+        return "both"
+    return "low" if below else "high" if above else ""
 
 
 def percent_interval(interval: AnyInterval, estimate: float | Gap) -> str:
@@ -73,14 +87,31 @@ def sided(interval: AnyInterval, estimate: float | Gap, write: Callable[[float],
     return f"{_limit(low, with_word)}{numbers.TO}{_limit(high, with_word)}"
 
 
-def number_needed_interval(needed: NumberNeeded) -> str:
-    """``9 to 31``, or ``NNTB 12 to ∞ to NNTH 40`` where the difference's interval holds no effect."""
+def number_needed_interval(needed: AnyNumberNeeded) -> str:
+    """``9 to 31``, or ``NNTB 12 to ∞ to NNTH 40`` where the difference's interval holds no effect.
+
+    A limit that is withheld is said to be: ``up to 28; the lower limit is withheld``.
+    """
     low, high = needed.low, needed.high
     if needed.through_infinity:
-        return numbers.TO.join((_needed(low), numbers.INFINITY, _needed(high)))
+        return _through_infinity(needed)
+    if isinstance(low, Gap):
+        return f"up to {_value(high)}; the lower {LIMIT_IS_WITHHELD}"
+    if isinstance(high, Gap):
+        return f"from {_value(low)}; the upper {LIMIT_IS_WITHHELD}"
     if needed.kind == low.kind == high.kind:
         return f"{numbers.number_needed(low.value)}{numbers.TO}{numbers.number_needed(high.value)}"
     return f"{_needed(low)}{numbers.TO}{_needed(high)}"
+
+
+def _through_infinity(needed: AnyNumberNeeded) -> str:
+    """``NNTB 12 to ∞ to NNTH 40``; of a withheld limit the kind alone: ``NNTB 3 to ∞ to NNTH, limit withheld``."""
+    low, high = needed.low, needed.high
+    near = "NNTH" if needed.kind == "NNTH" else "NNTB"
+    far = "NNTB" if needed.kind == "NNTH" else "NNTH"
+    first = f"{near}, {LIMIT_WITHHELD}," if isinstance(low, Gap) else _needed(low)
+    last = f"{far}, {LIMIT_WITHHELD}" if isinstance(high, Gap) else _needed(high)
+    return numbers.TO.join((first, numbers.INFINITY, last))
 
 
 def relative(ratio: float, link: str = " ") -> str:
@@ -120,6 +151,10 @@ def _limit(limit: float | Gap, write: Callable[[float], str]) -> str:
     return NO_LIMIT if isinstance(limit, Gap) else write(limit)
 
 
-def _needed(limit: NumberNeededLimit) -> str:
-    value = numbers.number_needed(limit.value)
-    return value if limit.kind == "neither" else f"{limit.kind} {value}"
+def _value(limit: NumberNeededLimit | Gap) -> str:
+    return LIMIT_WITHHELD if isinstance(limit, Gap) else numbers.number_needed(limit.value)
+
+
+def _needed(limit: NumberNeededLimit | Gap) -> str:
+    kind = "" if isinstance(limit, Gap) or limit.kind == "neither" else f"{limit.kind} "
+    return f"{kind}{_value(limit)}"

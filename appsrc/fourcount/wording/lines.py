@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass, replace
 from typing import Literal
 
-from fourcount.appraisal.findings import Conversion, Counts, Figure, Gap, Interval, NumberNeeded, OutcomeFindings
+from fourcount.appraisal.findings import AnyNumberNeeded, Conversion, Counts, Figure, Gap, Interval, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.number_needed import whole_number_needed
@@ -37,6 +37,12 @@ UNDER_THE_FOLD = ("odds_reference", "odds_index")
 
 NO_SPAN = "time span not given"
 HALF_ADDED = "adjusted: half added to each count"
+PAST_EVERYBODY = "the bare formula reaches past 100 in 100"
+PAST_A_RISK = {
+    "low": "the bare formula reaches below 0%",
+    "high": "the bare formula reaches beyond 100%",
+    "both": "the bare formula reaches below 0% and beyond 100%",
+}
 APPROXIMATE = "score, approximate"
 ALWAYS_SCORE = ("risk_difference", "risk_ratio")  # there is no exact interval of these in the exact family
 NOT_DETERMINED = "not determined"
@@ -89,7 +95,7 @@ def family_name(key: str, choices: Choices) -> str:
     return APPROXIMATE if choices.family == "exact" and key in ALWAYS_SCORE else choices.family
 
 
-def measure_name(key: str, outcome: Outcome, needed: NumberNeeded | None = None) -> str:
+def measure_name(key: str, outcome: Outcome, needed: AnyNumberNeeded | None = None) -> str:
     """What a line calls its measure."""
     risk = names.sentence_case(names.risk_name(outcome))
     if key == "number_needed":
@@ -115,7 +121,7 @@ def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choice
         return MeasureLine(
             key=key, name=measure_name(key, outcome), kind=KINDS.get(key, ""), group=group, withheld=gap_text(measure)
         )
-    if isinstance(measure, NumberNeeded):
+    if isinstance(measure, AnyNumberNeeded):
         return _number_needed_line(measure, outcome, findings.counts)
     low, high = _ends(measure)
     return MeasureLine(
@@ -133,13 +139,14 @@ def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choice
     )
 
 
-def _number_needed_line(needed: NumberNeeded, outcome: Outcome, counts: Counts) -> MeasureLine:
+def _number_needed_line(needed: AnyNumberNeeded, outcome: Outcome, counts: Counts) -> MeasureLine:
     return MeasureLine(
         key="number_needed",
         name=measure_name("number_needed", outcome, needed),
         detail=names.over_span(outcome) or NO_SPAN,
         estimate=whole_needed(counts),
         interval=limits.number_needed_interval(needed),
+        note=" ".join(gap_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap)),
     )
 
 
@@ -186,7 +193,7 @@ def _detail(key: str, counts: Counts, choices: Choices) -> str:
 
 
 def _note(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings) -> str:
-    fragments = [_adjusted(figure)]
+    fragments = [_adjusted(figure), _beyond(key, figure)]
     if key == "risk_ratio":
         fragments += [_relative_note(figure), _other_outcome_note(findings.measures["other_risk_ratio"])]
     if key == "odds_ratio":
@@ -202,6 +209,14 @@ def _adjusted(figure: Figure) -> str:
     return HALF_ADDED if not isinstance(figure.interval, Gap) and figure.interval.adjusted == "half" else ""
 
 
+def _beyond(key: str, figure: Figure) -> str:
+    """What has to be said beside a limit that no risk, and no difference of risks, can have."""
+    if key == "risk_difference":
+        return PAST_EVERYBODY if limits.beyond(figure.interval, -1.0, 1.0) else ""
+    ends = limits.beyond(figure.interval, 0.0, 1.0) if KINDS.get(key) == "risk" else ""
+    return PAST_A_RISK[ends] if ends else ""
+
+
 def _relative_note(figure: Figure) -> str:
     if isinstance(figure.estimate, Gap) or not limits.relative(figure.estimate):
         return ""
@@ -209,7 +224,7 @@ def _relative_note(figure: Figure) -> str:
     return f"{limits.relative(figure.estimate)}{f': {interval}' if interval else ''}"
 
 
-def _other_outcome_note(figure: Figure | NumberNeeded | Gap) -> str:
+def _other_outcome_note(figure: Figure | AnyNumberNeeded | Gap) -> str:
     if not isinstance(figure, Figure) or isinstance(figure.estimate, Gap):
         return ""
     interval = limits.ratio_interval(figure.interval, figure.estimate)

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, AnyNumberNeeded, OutcomeFindings
+from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers

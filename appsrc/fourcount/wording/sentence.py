@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, OutcomeFindings, Range
+from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, Interval, OutcomeFindings, Range
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.methods import test
@@ -12,6 +12,7 @@ from fourcount.wording.headline import People, choose
 
 COMPATIBLE = "compatible with fewer and with more"
 UNDER_ONE = "under 1"
+PAST_EVERYBODY = "The bare formula’s {level} interval reaches past 100 in 100, so it is not put into people."
 NO_P = "There is no p: "
 P_FOLLOWS = "The p value takes a moment and will follow."
 MEANINGS = {
@@ -50,7 +51,7 @@ def measure_sentence(key: str, outcome: Outcome, findings: OutcomeFindings, choi
         return gap_text(findings.counts)
     if isinstance(measure, Gap):
         return gap_text(measure)
-    if isinstance(measure, NumberNeeded):
+    if isinstance(measure, AnyNumberNeeded):
         return meanings.number_needed(outcome, measure, findings, choices)
     if isinstance(measure.estimate, Gap):
         if isinstance(measure.interval, Gap):
@@ -119,6 +120,8 @@ def _difference(difference: float, people: People, interval: Interval | Range | 
     low, high, level = interval.low, interval.high, f"({numbers.level(choices.level)} interval)"
     if isinstance(low, Gap) or isinstance(high, Gap):
         return f"{said}."
+    if limits.beyond(interval, -1.0, 1.0):
+        return f"{said}. {PAST_EVERYBODY.format(level=numbers.level(choices.level))}"
     if low * difference > 0 and high * difference > 0:
         few, many = sorted((abs(low), abs(high)))
         return f"{said}, and could be as few as {_size(few, people)} or as many as {_size(many, people)} {level}."

@@ -6,7 +6,7 @@ from collections.abc import Callable
 from dataclasses import dataclass
 
 from fourcount.appraisal.every import conditional_odds_ratio
-from fourcount.appraisal.findings import Conversion, Counts, Figure, Gap, NumberNeeded, OutcomeFindings
+from fourcount.appraisal.findings import AnyNumberNeeded, Conversion, Counts, Figure, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.methods import METHODS, TESTS, Method, Test, method, test
@@ -56,7 +56,7 @@ def working(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: 
     if measure == TEST:
         return Working(title=TEST_TITLE, sentence=p_sentence(findings), rows=_test_rows(findings))
     found = findings.measures[measure]
-    needed = found if isinstance(found, NumberNeeded) else None
+    needed = found if isinstance(found, AnyNumberNeeded) else None
     title = OTHER_TITLE if measure == "other_risk_ratio" else lines.measure_name(measure, outcome, needed)
     sentence = measure_sentence(measure, outcome, findings, choices)
     counts = findings.counts
@@ -140,11 +140,11 @@ def _turned(counts: Counts) -> Counts:
 
 
 def _interval_rows(
-    measure: str, found: Figure | NumberNeeded, findings: OutcomeFindings, choices: Choices
+    measure: str, found: Figure | AnyNumberNeeded, findings: OutcomeFindings, choices: Choices
 ) -> list[Row]:
     """The shown interval, and the method behind it in full."""
     label = f"Interval, {numbers.level(choices.level)}{', per 100' if measure == 'risk_difference' else ''}"
-    if isinstance(found, NumberNeeded):
+    if isinstance(found, AnyNumberNeeded):
         shown, figure = limits.number_needed_interval(found), findings.measures["risk_difference"]
     else:
         gap = gap_text(found.interval) if isinstance(found.interval, Gap) else ""
@@ -209,7 +209,7 @@ def _conditional_row(counts: Counts) -> Row:
     return ("Conditional estimate, given both margins", text)
 
 
-def _units(found: Figure | NumberNeeded) -> list[Row]:
+def _units(found: Figure | AnyNumberNeeded) -> list[Row]:
     """The difference in its two other units; a percentage of nothing."""
     if not isinstance(found, Figure) or isinstance(found.estimate, Gap):
         return []
