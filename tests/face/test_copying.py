@@ -62,7 +62,7 @@ def test_copying_is_confirmed_until_something_changes(example: Hands, command: s
 def test_copied_text_puts_absolute_before_relative(example: Hands) -> None:
     """Risks and their difference come before any ratio, so that a letter cannot quote the ratio alone by its top."""
     example.do("copy-text")
-    text = copied_text()
+    text = copied_text().lower()
     assert text.index("17.1%") < text.index("risk ratio")
     assert text.index("fewer") < text.index("risk ratio")
     assert "0.54" in text

@@ -274,9 +274,18 @@ def test_text_is_never_taken_for_markup(example: Hands) -> None:
     assert "<b>new</b> & old" in example.sentence
 
 
-@pytest.mark.parametrize("pasted", ["1,204", "1 204", "38/412", "38 (9.2%)"])
+@pytest.mark.parametrize("pasted", ["1,204", "1'204", "38/412", "38 (9.2%)"])
 def test_a_count_is_taken_as_it_is_printed(hands: Hands, pasted: str) -> None:
     """What stands in a paper's cell can be typed as it stands there, and stays so."""
     hands.type(pasted)
     assert hands.texts[0] == pasted
     assert not hands.window.printed.grid.cells[CELLS[0]].marked
+
+
+def test_a_count_with_an_ordinary_space_is_used_and_said(hands: Hands) -> None:
+    """38 374 could be two counts pasted into one cell, so the window says as what it was taken."""
+    hands.count("38 374", "10", "70", "339")
+    assert hands.texts[0] == "38 374"
+    assert len(hands.notes) == 1
+    assert "38,374" in hands.notes[0]
+    assert "risk_ratio" in hands.rows
