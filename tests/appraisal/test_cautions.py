@@ -27,7 +27,7 @@ def facts(appraised):
 def test_the_keys_in_order():
     """What changes the reader's conclusion comes first."""
     assert list(dict.fromkeys(rule.key for rule in CAUTIONS)) == [
-        "read-as", "percent-disagrees",
+        "read-as", "percent-disagrees", "index-looks-like-control",
         "odds-ratio-differs", "effect-kept-constant", "baseline-far", "baseline-uncertain", "rests-on-baseline",
         "controls-over-time", "observational", "converted-limits", "zero-cells", "half-added", "through-no-effect",
         "family-parts", "rare-harm", "leans",
@@ -295,3 +295,30 @@ def test_a_mark_that_is_used_is_a_caution(facts):
 def test_a_cell_that_adds_up_is_no_caution(facts):
     """A percentage that the count gives says nothing."""
     assert facts("38 (9.2%)", 374, 70, 339) == {}
+
+
+@pytest.mark.parametrize(
+    ("index", "reference", "holds"),
+    [
+        ("Placebo", "Aspirin", True),
+        ("the CONTROL group", "", True),
+        ("usual  care", "night lights", True),
+        ("Sham surgery", "Surgery", True),
+        ("no treatment", "physiotherapy", True),
+        ("Aspirin", "Placebo", False),
+        ("Placebo", "no treatment", False),
+        ("Controlled release", "Aspirin", False),
+        ("", "", False),
+    ],
+)
+def test_index_looks_like_control(facts, index, reference, holds):
+    """A whole word that names a comparison, on the index side alone."""
+    found = facts(*TABLE, first_label_text=index, second_label_text=reference).get("index-looks-like-control")
+    assert found == ([{"label": " ".join(index.split())}] if holds else None)
+
+
+def test_index_looks_like_control_until_the_groups_are_swapped(facts):
+    """Swapping the groups puts the comparison where it belongs."""
+    rest = {"first_label_text": "placebo", "second_label_text": "aspirin"}
+    assert "index-looks-like-control" in facts(*TABLE, **rest)
+    assert "index-looks-like-control" not in facts(*TABLE, index_group="second", **rest)

@@ -35,6 +35,7 @@ MARK_KEYS = (
 FACTS = {
     "text": "38 (9.9%)",
     "events": 38,
+    "label": "placebo",
     "total": 412,
     "odds_ratio": 0.4921,
     "risk_ratio": 0.5389,

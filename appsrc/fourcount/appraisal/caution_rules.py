@@ -2,10 +2,15 @@
 
 from __future__ import annotations
 
+import re
+
 from fourcount.appraisal.case import NO_EFFECT, Case, excludes, straddles, value
 from fourcount.appraisal.findings import Fact, Gap, Interval
 
 Facts = dict[str, Fact]
+
+COMPARISON = re.compile(r"\b(placebo|control|usual care|standard care|no treatment|sham)\b", re.IGNORECASE)
+"""What papers call the group that the other one is compared with (common practice)."""
 
 RARE = 0.01
 """A harm under this risk is called rare here: 1%, common practice."""
@@ -17,6 +22,14 @@ def used_though_marked(case: Case, *, key: str, field: str) -> Facts | None:
         if mark.used and (mark.key, mark.field) == (key, field):
             return dict(mark.facts)
     return None
+
+
+def index_looks_like_control(case: Case) -> Facts | None:
+    """The index group has a name that a comparison usually has, and the reference group has none such."""
+    index, reference = (
+        " ".join(text.split()) for text in (case.outcome.index_label_text, case.outcome.reference_label_text)
+    )
+    return {"label": index} if COMPARISON.search(index) and not COMPARISON.search(reference) else None
 
 
 def odds_ratio_differs(case: Case) -> Facts | None:

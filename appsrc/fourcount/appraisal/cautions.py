@@ -29,6 +29,7 @@ CAUTIONS: tuple[Rule, ...] = (
         for key in ("read-as", "percent-disagrees")
         for field in CELLS
     ),
+    Rule(key="index-looks-like-control", holds=rules.index_looks_like_control, source="common practice"),
     Rule(
         key="odds-ratio-differs",
         holds=rules.odds_ratio_differs,

@@ -14,6 +14,10 @@ TEXTS = {
         "A percentage in the print",
         "{text}: {events} of {total} does not round to this percentage; the count is used.",
     ),
+    "index-looks-like-control": (
+        "Which group is which",
+        "The index group is called “{label}”; if it is the comparison, swap the groups.",
+    ),
     "odds-ratio-differs": (
         "Odds ratio and risk ratio",
         (
