@@ -242,10 +242,12 @@ def test_family_parts_not_while_the_test_has_no_value(facts):
         ((9, 991, 1, 999), {"left_welcome": True}, False),
         ((9, 991, 1, 999), {"design": "cohort"}, False),
         ((9, 991, 1, 999), {"design": "case-control"}, False),
+        ((18, 1982, 10, 1990), {}, True),  # ten harmed or more, and the interval includes 0
+        ((9000, 991_000, 1000, 999_000), {}, False),  # a trial of two million people shows it
     ],
 )
 def test_rare_harm(facts, cells, rest, holds):
-    """In a trial, an unwelcome event under 1% that is more frequent in the index group."""
+    """In a trial too small for it, an unwelcome event under 1% that is more frequent in the index group."""
     assert ([{"risk": 0.009}] if holds else None) == facts(*cells, **rest).get("rare-harm")
 
 
@@ -322,3 +324,12 @@ def test_index_looks_like_control_until_the_groups_are_swapped(facts):
     rest = {"first_label_text": "placebo", "second_label_text": "aspirin"}
     assert "index-looks-like-control" in facts(*TABLE, **rest)
     assert "index-looks-like-control" not in facts(*TABLE, index_group="second", **rest)
+
+
+def test_a_survey_is_named_where_its_ratio_has_another_name(facts):
+    """The facts of the cautions that speak of a risk ratio say that it is one of prevalences."""
+    found = facts(0, 20, 12, 8, design="survey", baseline="30%", family="textbook")
+    for key in ("effect-kept-constant", "half-added"):
+        assert all(each["design"] == "survey" for each in found[key])
+    assert "design" not in facts(*TABLE, baseline="12%")["effect-kept-constant"][0]
+    assert facts(80, 20, 50, 50, design="survey")["odds-ratio-differs"][0]["design"] == "survey"

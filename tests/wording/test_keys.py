@@ -138,6 +138,16 @@ def test_a_caution_says_the_numbers_it_is_about():
     assert text == "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%."
 
 
+@pytest.mark.parametrize("key", ["effect-kept-constant", "odds-ratio-differs", "half-added"])
+def test_in_a_survey_the_ratio_is_one_of_prevalences(key):
+    """The cautions call it as the rows do."""
+    facts = {**FACTS, "design": "survey", "measure": "risk_ratio"}
+    text = cautions.caution_text(Caution(key=key, facts=facts))
+    assert "prevalence ratio" in text
+    assert "risk ratio" not in text
+    assert "risk ratio" in cautions.caution_text(Caution(key=key, facts={**facts, "design": "cohort"}))
+
+
 def test_several_zeros_are_counted():
     """One is, two are."""
     one, two = (cautions.caution_text(Caution(key="zero-cells", facts={"count": n})) for n in (1, 2))

@@ -15,6 +15,9 @@ COMPARISON = re.compile(r"\b(placebo|control|usual care|standard care|no treatme
 RARE = 0.01
 """A harm under this risk is called rare here: 1%, common practice."""
 
+FEW_HARMED = 10
+"""With fewer harmed people in the index group than this a trial shows a rare harm badly: a threshold of this program."""
+
 
 def used_though_marked(case: Case, *, key: str, field: str) -> Facts | None:
     """A cell is marked and its count used all the same, which every copy has to say as the screen does."""
@@ -45,7 +48,7 @@ def odds_ratio_differs(case: Case) -> Facts | None:
     index = counts.index_non_events * counts.reference_total
     if 5 * max(reference, index) <= 6 * min(reference, index):
         return None
-    return {"odds_ratio": odds_ratio, "risk_ratio": risk_ratio}
+    return {"odds_ratio": odds_ratio, "risk_ratio": risk_ratio, **_survey(case)}
 
 
 def effect_kept_constant(case: Case) -> Facts | None:
@@ -56,7 +59,8 @@ def effect_kept_constant(case: Case) -> Facts | None:
     effect = value(carried.carried)
     if effect is None:
         return None
-    return {"effect": carried.effect, "value": effect, "baseline": carried.baseline, "study": study}
+    facts: Facts = {"effect": carried.effect, "value": effect, "baseline": carried.baseline, "study": study}
+    return {**facts, **_survey(case)}
 
 
 def baseline_far(case: Case) -> Facts | None:
@@ -116,7 +120,7 @@ def half_added(case: Case, *, measure: str) -> Facts | None:
     figure = case.figures.get(measure)
     if figure is None or not isinstance(figure.interval, Interval) or figure.interval.adjusted != "half":
         return None
-    return {"measure": measure}
+    return {"measure": measure, **_survey(case)}
 
 
 def through_no_effect(case: Case) -> Facts | None:
@@ -141,11 +145,16 @@ def family_parts(case: Case) -> Facts | None:
 
 
 def rare_harm(case: Case) -> Facts | None:
-    """In a trial an unwelcome event is rare and more frequent in the index group."""
+    """In a trial an unwelcome event is rare and more frequent in the index group, and the trial is too small for it.
+
+    It is too small where the difference's interval includes 0, or where fewer than ten people had the event.
+    """
     risk, difference = (value(case.figures.get("risk_index")), value(case.figures.get("risk_difference")))
     if risk is None or difference is None or case.outcome.design != "trial" or case.outcome.welcome:
         return None
-    return {"risk": risk} if difference > 0 and risk < RARE else None
+    open_to_chance = excludes(case.figures.get("risk_difference"), 0.0) is not True
+    too_small = open_to_chance or case.counts.index_events < FEW_HARMED
+    return {"risk": risk} if difference > 0 and risk < RARE and too_small else None
 
 
 def leans(case: Case) -> Facts | None:
@@ -162,3 +171,8 @@ def leans(case: Case) -> Facts | None:
     if difference < 0 and reaches_up:
         return {"side": "more"}
     return {"side": "fewer"} if difference > 0 and reaches_down else None
+
+
+def _survey(case: Case) -> Facts:
+    """The design, where it gives the risk ratio another name."""
+    return {"design": "survey"} if case.outcome.design == "survey" else {}

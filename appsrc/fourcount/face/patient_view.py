@@ -8,12 +8,12 @@ from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFi
 from fourcount.ink.picture import KeyEntry, Picture, PictureWords, Side
 from fourcount.picture.plan import Plan, plan
 from fourcount.picture.scales import risk_scale
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import Effect, Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import labels, numbers
 from fourcount.wording.axis import axis_words
 from fourcount.wording.gaps import gap_text, mark_text
-from fourcount.wording.names import sentence_case
+from fourcount.wording.names import effect_name, sentence_case
 from fourcount.wording.patient import WHICH_PEOPLE, PatientWords, patient_words
 from fourcount.wording.patient import drawn as what_is_drawn
 
@@ -39,7 +39,7 @@ def patient_view(outcome: Outcome, findings: OutcomeFindings, choices: Choices, 
     view = PatientView(
         baseline_hint=_baseline_hint(outcome, findings),
         effect="odds_ratio" if outcome.design == "case-control" else outcome.patient.effect,
-        effect_words=_effect_words(findings),
+        effect_words=_effect_words(outcome, findings),
         effect_is_free=outcome.design != "case-control",
         mark=marks.get("starting_risk_text", ""),
     )
@@ -108,11 +108,12 @@ def _baseline_hint(outcome: Outcome, findings: OutcomeFindings) -> str:
     return ""
 
 
-def _effect_words(findings: OutcomeFindings) -> dict[str, str]:
+def _effect_words(outcome: Outcome, findings: OutcomeFindings) -> dict[str, str]:
     """The choices of effect with the study's own estimates in them."""
-    result = {}
-    for key, name in labels.EFFECTS.items():
-        figure = findings.measures[key]
+    result: dict[str, str] = {}
+    effects: tuple[Effect, ...] = ("risk_ratio", "odds_ratio")
+    for key in effects:
+        figure, name = findings.measures[key], effect_name(outcome, key)
         result[key] = name
         if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
             result[key] = labels.EFFECT_KEPT.format(effect=name, value=numbers.ratio(figure.estimate))

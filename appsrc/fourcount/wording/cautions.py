@@ -19,9 +19,9 @@ TEXTS = {
         "The index group is called “{label}”; if it is the comparison, swap the groups.",
     ),
     "odds-ratio-differs": (
-        "Odds ratio and risk ratio",
+        "Two ratios",
         (
-            "The odds ratio {odds_ratio} lies farther from 1 than the risk ratio {risk_ratio}: "
+            "The odds ratio {odds_ratio} lies farther from 1 than the {ratio_name} {risk_ratio}: "
             "do not read the one as the other."
         ),
     ),

@@ -25,6 +25,7 @@ MEASURE_NAMES = {
     "other_risk_ratio": "risk ratio of the other outcome",
     "odds_ratio": "odds ratio",
 }
+RATIO_OF_PREVALENCES = "prevalence ratio"
 DESIGN_NAMES = {
     "trial": "randomised trial",
     "cohort": "cohort study",
@@ -65,6 +66,10 @@ class _Written(dict[str, str]):
 
     def __init__(self, facts: Mapping[str, Fact]) -> None:
         super().__init__({name: _written(name, value) for name, value in facts.items()})
+        self["ratio_name"] = RATIO_OF_PREVALENCES if facts.get("design") == "survey" else MEASURE_NAMES["risk_ratio"]
+        for name in ("effect", "measure"):
+            if facts.get(name) == "risk_ratio":
+                self[name] = self["ratio_name"]
 
     def __missing__(self, name: str) -> str:
         return STAND_INS.get(name, "…")
