@@ -16,7 +16,7 @@ RARE = 0.01
 """A harm under this risk is called rare here: 1%, common practice."""
 
 FEW_HARMED = 10
-"""With fewer harmed people in the index group than this a trial shows a rare harm badly: a threshold of this program."""
+"""With fewer harmed people in the index group than this, a trial shows a rare harm badly: our own threshold."""
 
 
 def used_though_marked(case: Case, *, key: str, field: str) -> Facts | None:

@@ -77,7 +77,11 @@ CAUTIONS: tuple[Rule, ...] = (
         holds=rules.family_parts,
         source="common practice: a test and an interval of different methods can differ at the border",
     ),
-    Rule(key="rare-harm", holds=rules.rare_harm, source="CONSORT Harms 2022; rare as under 1%: common practice"),
+    Rule(
+        key="rare-harm",
+        holds=rules.rare_harm,
+        source="CONSORT Harms 2022; rare as under 1%: common practice; fewer than 10 harmed: our own threshold",
+    ),
     Rule(key="leans", holds=rules.leans, source="Murad 2009"),
 )
 
