@@ -12,6 +12,7 @@ from collections.abc import Mapping, Sequence
 from typing import TYPE_CHECKING, NoReturn, TextIO
 
 from fourcount import __version__
+from fourcount.wording import command as words
 
 if TYPE_CHECKING:
     from argparse import Namespace
@@ -20,26 +21,6 @@ if TYPE_CHECKING:
 
 COUNTS_NEEDED = 4
 GOOD, FAILED, MISTYPED = 0, 1, 2
-
-HELP = """\
-fourcount                              open the window
-fourcount answer A B C D [options]     what the four counts of one table say
-
-A and B are people with and without the event in the index group,
-C and D those in the reference group.
-
-options of answer:
-  --design DESIGN      trial, cohort, survey or case-control (trial)
-  --level PERCENT      confidence level, 80 to 99.9 (95)
-  --intervals FAMILY   score, textbook or exact (score)
-  --baseline RISK      a patient's starting risk, such as 12% or '12 in 100'
-  --welcome            the event is a good one
-  --json               every figure by every method, for a program to read
-
-  --version            the version of the program
-  --help               this page
-"""
-NO_DISPLAY = "Fourcount cannot open a window: no display is there (neither DISPLAY nor WAYLAND_DISPLAY is set)."
 
 _MINUS_NUMBER = re.compile(r"-[0-9.,]")
 
@@ -63,22 +44,24 @@ def _run(given: list[str]) -> int:
         return _open_window()
     if given[0] == "answer":
         return _answer(given[1:])
+    if given[0] in ("--help", "-h", "--version") and len(given) > 1:
+        raise MistypedError(words.TOO_MANY.format(option=given[0]))
     if given[0] in ("--help", "-h"):
-        return _say(HELP)
+        return _say(words.HELP)
     if given[0] == "--version":
         return _say(f"fourcount {__version__}\n")
     kind = "option" if given[0].startswith("-") else "command"
-    raise MistypedError(f"There is no {kind} {_quoted(given[0])}: try 'fourcount --help'.")
+    raise MistypedError(words.UNKNOWN.format(kind=kind, text=_quoted(given[0])))
 
 
 def _answer(given: list[str]) -> int:
     wanted, unknown = _parsed(given)
     if wanted.help:
-        return _say(HELP)
+        return _say(words.HELP)
     if wanted.version:
         return _say(f"fourcount {__version__}\n")
     if unknown:
-        raise MistypedError(f"There is no option {_quoted(unknown[0])}: try 'fourcount --help'.")
+        raise MistypedError(words.UNKNOWN.format(kind="option", text=_quoted(unknown[0])))
     question = _question(wanted)
     from fourcount.appraisal.appraise import appraise
 
@@ -100,7 +83,7 @@ def _question(wanted: Namespace) -> Question:
     from fourcount.publish.answer import asked
 
     if len(wanted.counts) != COUNTS_NEEDED:
-        raise MistypedError(f"Four counts are needed after 'answer', not {len(wanted.counts)}.")
+        raise MistypedError(words.FOUR_COUNTS.format(number=len(wanted.counts)))
     try:
         return asked(
             tuple(_count(text) for text in wanted.counts),
@@ -123,11 +106,11 @@ def _count(text: str) -> int:
 
     reading = read_cell(text)
     if isinstance(reading, Blank):
-        raise ValueError("A count is empty: a whole number of people is needed, such as 38.")
+        raise ValueError(words.NO_COUNT)
     if isinstance(reading, Unreadable):
         raise ValueError(f"{mark_text(reading)}.")
     if reading.total is not None or reading.percent_text is not None:
-        raise ValueError(f"{specimen(text)}: only the count itself is needed here, such as {reading.value}.")
+        raise ValueError(words.ONLY_THE_COUNT.format(text=specimen(text), value=reading.value))
     return reading.value
 
 
@@ -138,7 +121,7 @@ def _level(text: str) -> float:
 
     reading = read_level(text)
     if isinstance(reading, Blank):
-        raise ValueError("The level is empty: a confidence level such as 95% is needed.")
+        raise ValueError(words.NO_LEVEL)
     if isinstance(reading, Unreadable):
         raise ValueError(f"{mark_text(reading)}.")
     return reading.value
@@ -156,7 +139,7 @@ def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
 
         def error(self, message: str) -> NoReturn:
             option = re.match(r"argument (\S+): expected one argument", message)
-            said = f"{option[1]} needs a value after it." if option else f"These options do not fit: {message}."
+            said = words.NO_VALUE.format(option=option[1]) if option else words.NO_FIT.format(message=message)
             raise MistypedError(said)
 
     parser = Parser(prog="fourcount answer", add_help=False, allow_abbrev=False)
@@ -174,7 +157,7 @@ def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
 
 def _open_window() -> int:
     if sys.platform.startswith("linux") and not _display_in(os.environ):
-        _complain(NO_DISPLAY)
+        _complain(words.NO_DISPLAY)
         return FAILED
     import fourcount.face.running_start  # noqa: F401 - before Qt is loaded
     from fourcount.face.application import run
@@ -190,7 +173,7 @@ def _display_in(environment: Mapping[str, str]) -> bool:
 def _say(text: str) -> int:
     """Write to stdout at once, so that what stops it is noticed here and not while Python ends."""
     if sys.stdout is None:  # closed by whoever started the command
-        _complain("There is no standard output to write to.")
+        _complain(words.NO_STREAM)
         return FAILED
     if "utf" not in (sys.stdout.encoding or "utf").lower() and hasattr(sys.stdout, "reconfigure"):
         sys.stdout.reconfigure(errors="replace")
@@ -202,7 +185,7 @@ def _say(text: str) -> int:
         return FAILED
     except OSError as trouble:
         _let_go_of(sys.stdout)
-        _complain(f"Nothing could be written: {trouble.strerror or trouble}.")
+        _complain(words.NOT_WRITTEN.format(reason=trouble.strerror or trouble))
         return FAILED
     return GOOD
 

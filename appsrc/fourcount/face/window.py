@@ -56,6 +56,7 @@ class MainWindow(QMainWindow):
         self._settings = settings
         self._later = later
         self._painted = False
+        self._shown: Record | None = None
         self.commands = Commands(session, look, self)
         self.actions_by_key = commands_table.make_actions(self)
         self.header = Header(look)
@@ -166,7 +167,9 @@ class MainWindow(QMainWindow):
         """Show a record and its findings in every view; ask for what follows later."""
         outcome = self.session.outcome
         self.header.show_state(record)
-        self.header.notice.show_words("")
+        if record is not self._shown:
+            self.header.notice.show_words("")
+        self._shown = record
         self.printed.show_state(outcome, findings)
         self.says.show_state(record, outcome, findings)
         self.patient.show_state(record, outcome, findings)

@@ -16,6 +16,7 @@ from fourcount.record.entry.readings import Blank, Unreadable
 from fourcount.record.entry.risk import read_risk
 from fourcount.record.outcome import CELLS, DESIGNS, Design, EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family
+from fourcount.wording import command as words
 from fourcount.wording.gaps import mark_text
 
 COUNT_NAMES = ("index events", "index non-events", "reference events", "reference non-events")
@@ -100,11 +101,11 @@ def asked(
     """The question, each part of it checked; ValueError with one plain sentence otherwise."""
     whole = tuple(_count(value, name) for value, name in zip(counts, COUNT_NAMES, strict=True))
     if not isinstance(design, str) or design not in DESIGNS:
-        raise ValueError(f"The design must be one of {', '.join(DESIGNS)}, not {_shown(design)}.")
+        raise ValueError(words.ONE_OF.format(name="design", allowed=", ".join(DESIGNS), given=_shown(design)))
     if not isinstance(intervals, str) or intervals not in FAMILIES:
-        raise ValueError(f"The intervals must be one of {', '.join(FAMILIES)}, not {_shown(intervals)}.")
+        raise ValueError(words.ONE_OF.format(name="intervals", allowed=", ".join(FAMILIES), given=_shown(intervals)))
     if not isinstance(unwelcome, bool):
-        raise ValueError(f"Whether the event is unwelcome must be True or False, not {_shown(unwelcome)}.")
+        raise ValueError(words.NOT_A_TRUTH.format(given=_shown(unwelcome)))
     return Question(
         counts=whole,
         design=design,
@@ -122,15 +123,14 @@ def _count(value: object, name: str) -> int:
     except TypeError:
         count = -1
     if not 0 <= count <= LARGEST_COUNT:
-        raise ValueError(f"The {name} must be a whole number from 0 to {LARGEST_COUNT:,}, not {_shown(value)}.")
+        raise ValueError(words.NOT_A_COUNT.format(name=name, largest=f"{LARGEST_COUNT:,}", given=_shown(value)))
     return count
 
 
 def _level(level: object) -> float:
     usable = isinstance(level, Real) and not isinstance(level, bool)
     if not usable or not LOWEST_LEVEL <= cast(float, level) <= HIGHEST_LEVEL:
-        allowed = f"a fraction from {LOWEST_LEVEL:.2f} to {HIGHEST_LEVEL}"
-        raise ValueError(f"The level must be {allowed}, such as 0.95, not {_shown(level)}.")
+        raise ValueError(words.NOT_A_LEVEL.format(low=f"{LOWEST_LEVEL:.2f}", high=HIGHEST_LEVEL, given=_shown(level)))
     return float(cast(float, level))
 
 
@@ -141,18 +141,18 @@ def _baseline_text(baseline: object) -> str:
     if isinstance(baseline, str):
         reading = read_risk(baseline)
         if isinstance(reading, Unreadable):
-            raise ValueError(f"The baseline cannot be used: {mark_text(reading)}.")
+            raise ValueError(words.UNUSABLE_BASELINE.format(reason=mark_text(reading)))
         if isinstance(reading, Blank):
-            raise ValueError("The baseline is empty: a risk such as 12% is needed, or none.")
+            raise ValueError(words.NO_BASELINE)
         return baseline
     usable = isinstance(baseline, Real) and not isinstance(baseline, bool)
     if not usable or not 0 <= cast(float, baseline) <= 1:
-        raise ValueError(f"The baseline must be a fraction from 0 to 1, or a text such as 12%, not {_shown(baseline)}.")
+        raise ValueError(words.NOT_A_BASELINE.format(given=_shown(baseline)))
     return f"{Decimal(repr(float(cast(float, baseline)))).scaleb(2):f}%"
 
 
 def _shown(value: object) -> str:
     """What was given, short enough for a sentence. Python refuses to write out a whole number of great length."""
     if isinstance(value, int) and abs(value) > 10**40:
-        return "a number as large as that" if value > 0 else "a number as small as that"
+        return words.HUGE if value > 0 else words.HUGE_BELOW_ZERO
     return reprlib.repr(value)

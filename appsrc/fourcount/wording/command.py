@@ -1,0 +1,44 @@
+"""The words of the command in a terminal, and of the function that gives its figures to Python."""
+
+from __future__ import annotations
+
+HELP = """\
+fourcount                              open the window
+fourcount answer A B C D [options]     what the four counts of one table say
+
+A and B are people with and without the event in the index group,
+C and D those in the reference group.
+
+options of answer:
+  --design DESIGN      trial, cohort, survey or case-control (trial)
+  --level PERCENT      confidence level, 80 to 99.9 (95)
+  --intervals FAMILY   score, textbook or exact (score)
+  --baseline RISK      a patient's starting risk, such as 12% or '12 in 100'
+  --welcome            the event is a good one
+  --json               every figure by every method, for a program to read
+
+  --version            the version of the program
+  --help               this page
+"""
+NO_DISPLAY = "Fourcount cannot open a window: no display is there (neither DISPLAY nor WAYLAND_DISPLAY is set)."
+
+NO_STREAM = "There is no standard output to write to."
+NOT_WRITTEN = "Nothing could be written: {reason}."
+UNKNOWN = "There is no {kind} {text}: try 'fourcount --help'."
+TOO_MANY = "Nothing may follow {option}."
+FOUR_COUNTS = "Four counts are needed after 'answer', not {number}."
+NO_COUNT = "A count is empty: a whole number of people is needed, such as 38."
+ONLY_THE_COUNT = "{text}: only the count itself is needed here, such as {value}."
+NO_LEVEL = "The level is empty: a confidence level such as 95% is needed."
+NO_VALUE = "{option} needs a value after it."
+NO_FIT = "These options do not fit: {message}."
+
+ONE_OF = "The {name} must be one of {allowed}, not {given}."
+NOT_A_TRUTH = "Whether the event is unwelcome must be True or False, not {given}."
+NOT_A_COUNT = "The {name} must be a whole number from 0 to {largest}, not {given}."
+NOT_A_LEVEL = "The level must be a fraction from {low} to {high}, such as 0.95, not {given}."
+UNUSABLE_BASELINE = "The baseline cannot be used: {reason}."
+NO_BASELINE = "The baseline is empty: a risk such as 12% is needed, or none."
+NOT_A_BASELINE = "The baseline must be a fraction from 0 to 1, or a text such as 12%, not {given}."
+HUGE = "a number as large as that"
+HUGE_BELOW_ZERO = "a number as small as that"
