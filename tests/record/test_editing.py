@@ -10,6 +10,8 @@ from hypothesis import given
 from hypothesis import strategies as st
 
 from fourcount.record import editing
+from fourcount.record.entry.readings import Proportion
+from fourcount.record.entry.risk import read_risk
 from fourcount.record.entry.table import read_table
 from fourcount.record.outcome import CELLS, DESIGNS, Effect, EventsAndOthers, EventsOfTotal, Layout, Outcome, Patient
 from fourcount.record.paper import FAMILIES, Choices, Record
@@ -33,7 +35,7 @@ TEXT_FIELDS = sorted({*CELLS, *editing.OUTCOME_TEXTS, *editing.PATIENT_TEXTS})
 
 ACTIONS: dict[str, tuple[Any, set[str]]] = {
     "swap": (editing.swap_groups, {"index_group"}),
-    "count": (editing.count_other_outcome, {"counted"}),
+    "count": (editing.count_other_outcome, {"counted", "patient"}),
     "form": (lambda outcome: editing.in_form(outcome, EventsOfTotal), {"table"}),
     "clear": (editing.clear_table, {"table"}),
     "design": (lambda outcome: editing.with_design(outcome, "survey"), {"design"}),
@@ -110,6 +112,68 @@ def test_swapping_twice_is_nothing() -> None:
     """Two swaps, or counting the other outcome twice, give the outcome back."""
     assert editing.swap_groups(editing.swap_groups(OUTCOME)) == OUTCOME
     assert editing.count_other_outcome(editing.count_other_outcome(OUTCOME)) == OUTCOME
+
+
+@pytest.mark.parametrize(
+    ("typed", "turned"),
+    [
+        ("70%", "30%"),
+        ("12.50 %", "87.50 %"),
+        ("12,5 per cent", "87,5 per cent"),
+        ("99.9%", "0.1%"),
+        (".5%", "99.5%"),
+        ("0,125%", "99.875%"),
+        ("12", "88"),
+        ("99.5", "0.5%"),
+        ("99", "1%"),
+        ("0", "100"),
+        ("100%", "0%"),
+        ("12 in 100", "88 in 100"),
+        ("12/100", "88/100"),
+        ("12 out of 100", "88 out of 100"),
+        ("1 in 1,000", "999 in 1,000"),
+        ("1 in 10 000", "9 999 in 10 000"),
+        ("8,796 in 10,000", "1,204 in 10,000"),
+        ("1.5 in 1,000", "998.5 in 1,000"),
+        ("0,5 in 100", "99,5 in 100"),
+        ("9,500 in 10 000", "500 in 10 000"),
+        ("0,500 in 10", "9.500 in 10"),
+        ("0/5", "5/5"),
+        ("often", "often"),
+        ("0.12", "0.12"),
+        ("120%", "120%"),
+        (" ", " "),
+        ("", ""),
+    ],
+)
+def test_a_starting_risk_is_turned_with_the_outcome_that_it_is_of(typed: str, turned: str) -> None:
+    """Of 70% who heal, 30% do not, in the same style; text that gives no risk stays as it is."""
+    outcome = Outcome(patient=Patient(starting_risk_text=typed, starting_risk_source_text="audit", effect="odds_ratio"))
+    there = editing.count_other_outcome(outcome)
+    assert there.patient == Patient(starting_risk_text=turned, starting_risk_source_text="audit", effect="odds_ratio")
+    assert read_risk(editing.count_other_outcome(there).patient.starting_risk_text) == read_risk(typed)
+
+
+NUMBERS = st.integers(0, 10**6).map(str) | st.decimals(0, 100, places=3, allow_nan=False).map(str)
+RISKS = st.tuples(
+    NUMBERS,
+    st.sampled_from(("", "%", " %", " per cent", " in 100", "/1,000", " of 10 000", " per 1000000")),
+    st.sampled_from((".", ",", "\u00b7")),
+).map(lambda parts: parts[0].replace(".", parts[2]) + parts[1])
+
+
+@given(RISKS)
+def test_counting_the_other_outcome_twice_gives_an_equal_risk(text: str) -> None:
+    """Whatever can be read, the two risks make a whole, and the way back leads to where it began."""
+    there = editing.count_other_outcome(Outcome(patient=Patient(starting_risk_text=text)))
+    back = editing.count_other_outcome(there)
+    reading, turned = read_risk(text), read_risk(there.patient.starting_risk_text)
+    if isinstance(reading, Proportion):
+        assert isinstance(turned, Proportion)
+        assert reading.value + turned.value == pytest.approx(1, abs=1e-15)
+        assert read_risk(back.patient.starting_risk_text) == reading
+    else:
+        assert there.patient.starting_risk_text == text
 
 
 def test_a_readable_row_takes_the_other_form() -> None:

@@ -14,6 +14,7 @@ from msgspec.structs import fields, replace
 from fourcount.record.outcome import (
     CELLS,
     DESIGNS,
+    Column,
     Design,
     Effect,
     EventsAndOthers,
@@ -61,8 +62,18 @@ def swap_groups(outcome: Outcome) -> Outcome:
 
 
 def count_other_outcome(outcome: Outcome) -> Outcome:
-    """The other column is counted. What was typed stays where it is."""
-    return replace(outcome, counted="right" if outcome.counted == "left" else "left")
+    """The other column is counted. What was typed stays where it is, but for a starting risk.
+
+    That is a risk of the counted outcome: 70% who heal are 30% who do not. So it becomes its complement in the same
+    style of writing; text that gives no risk stays. Counting twice gives an equal risk.
+    """
+    counted: Column = "right" if outcome.counted == "left" else "left"
+    patient = outcome.patient
+    if patient.starting_risk_text:
+        from fourcount.record.entry.complement import complement_text  # the window starts without the readers
+
+        patient = replace(patient, starting_risk_text=complement_text(patient.starting_risk_text))
+    return replace(outcome, counted=counted, patient=patient)
 
 
 def in_form(outcome: Outcome, form: type[EventsAndOthers] | type[EventsOfTotal]) -> Outcome:

@@ -2,7 +2,8 @@
 
 All text is kept exactly as typed; ``record.entry`` reads it. Positions are those of the print: the
 *first* and *second* group, the *left* and *right* column. Which group is the index group and which
-column is counted are choices beside the text, so that swapping either never moves what was typed.
+column is counted are choices beside the text, so that swapping either never moves what was typed. A starting
+risk alone is turned to its complement with the counted column, whose risk it is.
 """
 
 from __future__ import annotations

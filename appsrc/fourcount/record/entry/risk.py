@@ -9,10 +9,10 @@ from fourcount.record.entry.cell import LARGEST_COUNT
 from fourcount.record.entry.digits import LONGEST, decimal_number, plain, specimen, whole_number
 from fourcount.record.entry.readings import Blank, Proportion, Unreadable
 
-_PERCENT = re.compile(
+WITH_SIGN = re.compile(
     r"(?P<minus>-)? *(?P<number>[0-9][0-9.,\u00b7]*|[.,][0-9]+) *(?P<sign>%|per ?cent)?", re.IGNORECASE
 )
-_IN = re.compile(
+SO_MANY_IN = re.compile(
     r"(?P<part>[0-9][0-9 ,'.\u00b7]*?)(?: */ *| +(?:in|per|(?:out +)?of) +)(?P<whole>[0-9 ,']*[0-9])", re.IGNORECASE
 )
 
@@ -28,9 +28,9 @@ def read_risk(text: str) -> Proportion | Blank | Unreadable:
         return Blank()
     if len(typed) > LONGEST:
         return _unreadable("not-a-risk", text)
-    if match := _IN.fullmatch(typed):
+    if match := SO_MANY_IN.fullmatch(typed):
         return _in_so_many(match["part"], match["whole"], text)
-    match = _PERCENT.fullmatch(typed)
+    match = WITH_SIGN.fullmatch(typed)
     number = decimal_number(_with_leading_zero(match["number"])) if match else None
     if match is None or number is None:
         return _unreadable("not-a-risk", text)
