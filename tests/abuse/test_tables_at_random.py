@@ -6,6 +6,7 @@ import json
 import random
 import re
 from collections.abc import Iterator
+from datetime import date
 from math import inf, isfinite
 
 import numpy as np
@@ -18,7 +19,7 @@ from fourcount.publish.contract import contract
 from fourcount.publish.listing import listing
 from fourcount.publish.sheet import tsv
 from fourcount.record.outcome import DESIGNS
-from fourcount.record.paper import FAMILIES
+from fourcount.record.paper import FAMILIES, Record
 from fourcount.wording.sentence import headline
 
 SMALL = (0, 0, 0, 1, 1, 2, 3, 5, 10, 19, 38, 99, 100, 412)
@@ -92,7 +93,9 @@ def test_no_raw_value_reaches_a_reader() -> None:
         findings = findings_of(question)
         arguments = (question.outcome, findings, question.choices)
         assert not RAW.search(listing(*arguments)), question
-        assert all(row.count("\t") == 4 for row in tsv(*arguments).splitlines()), question
+        record = Record(outcomes=(question.outcome,), choices=question.choices)
+        sheet = tsv(record, question.outcome, findings, version="0", today=date(2026, 1, 1))
+        assert all(row.count("\t") == 4 for row in sheet.splitlines()), question
         with np.errstate(all="raise", under="ignore"):
             given = contract(question.outcome, question.choices, findings)
         assert json.loads(json.dumps(given, allow_nan=False)) == given, question
