@@ -21,6 +21,8 @@ MARK_KEYS = (
     "not-a-count",
     "negative",
     "decimal",
+    "point-in-thousands",
+    "two-counts",
     "too-large",
     "events-above-total",
     "total-disagrees",
@@ -101,6 +103,19 @@ def test_what_the_entry_cannot_read_is_explained(read, typed):
 def test_a_negative_count_is_refused_in_so_many_words():
     """The sentence names what is wrong."""
     assert gaps.mark_text(Mark(field="", key="negative", facts={"text": "-3"})) == "-3: a count cannot be negative"
+
+
+def test_a_refusal_says_what_would_do():
+    """A point before thousands is met with the comma, and two counts with a cell for each."""
+    say = {text: gaps.mark_text(read_cell(text)) for text in ("1.204", "1.204.567", "1.20", "38, 374", "38\t374")}
+    assert say == {
+        "1.204": "1.204: people are counted whole; a thousands mark is a comma, as in 1,204",
+        "1.204.567": "1.204.567: people are counted whole; a thousands mark is a comma, as in 1,204,567",
+        "1.20": "1.20: people are counted whole, without decimals",
+        "38, 374": "38, 374: one count in each cell",
+        "38\t374": "38 374: one count in each cell",
+    }
+    assert gaps.gap_text(Gap("unreadable")) == "A cell of the table cannot be used; the mark beside it says why."
 
 
 def test_a_count_in_two_parts_says_how_it_is_read():

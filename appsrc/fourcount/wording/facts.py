@@ -35,6 +35,7 @@ DESIGN_NAMES = {
 COUNT_WORDS = ("None", "One", "Two", "Three", "Four")
 STAND_INS = {
     "text": "This",
+    "comma": "1,204",
     "baseline": "this starting risk",
     "study": "risk",
     "risk": "so low a risk",

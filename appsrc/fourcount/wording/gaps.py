@@ -19,7 +19,7 @@ GAP_TEXTS = {
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     # the design, the table, the patient
     "not-typed": "Type the four counts of the table.",
-    "unreadable": "A cell of the table cannot be read as a count; the mark beside it says why.",
+    "unreadable": "A cell of the table cannot be used; the mark beside it says why.",
     "follows": "This figure takes a moment and will follow.",
     "design-survey-nnt": "A cross-sectional survey sees who has the event at one time, not who comes to have it, "
     "so it gives no number needed to treat.",
@@ -47,6 +47,8 @@ MARK_TEXTS = {
     "not-a-count": "{text}: a whole number of people is needed, such as 38",
     "negative": "{text}: a count cannot be negative",
     "decimal": "{text}: people are counted whole, without decimals",
+    "point-in-thousands": "{text}: people are counted whole; a thousands mark is a comma, as in {comma}",
+    "two-counts": "{text}: one count in each cell",
     "too-large": "{text}: a count goes up to 1,000,000,000",
     "events-above-total": "{text}: more events than people; the events have to fit into the total",
     "total-disagrees": "{text}: the total here is {typed}, but the group’s total is {total}; check the paper",

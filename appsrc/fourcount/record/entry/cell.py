@@ -18,6 +18,8 @@ _CELL = re.compile(
 )
 _SPACED = re.compile(r"\d{1,3}(?: \d{3})+")
 _NEGATIVE = re.compile(r"- ?[0-9.][0-9.,' ]*")
+_POINTED = re.compile(r"[1-9][0-9]{0,2}(?:\.[0-9]{3})+")
+_TWO_COUNTS = re.compile(r"[0-9]+[,;]?[ \t]+[0-9]+|[0-9]+;[0-9]+")
 _DECIMAL = re.compile(r"[0-9]*[.,\u00b7][0-9]+")
 
 
@@ -25,9 +27,10 @@ def read_cell(text: str) -> Count | Blank | Unreadable:
     """A count as typed or pasted: ``38``, ``1,204``, ``38/412``, ``38 of 412``, ``38 (9.2%)``, ``38/412 (9.2%)``.
 
     Thousands marks are commas, spaces and apostrophes, one kind in a number and only before groups of three. A point
-    is always a decimal point, so ``1.204`` is no count, and so is ``1,20``. A percentage may stand in brackets with or
-    without its sign, as columns headed "n (%)" print it; it is kept as text and never used as a number. Nothing else
-    may follow: a footnote mark (``38*``) makes the cell unreadable, since it might be a digit of the print.
+    is always a decimal point, so ``1.204`` is no count, and so is ``1,20``; two counts (``38, 374``) are not one. A
+    percentage may stand in brackets with or without its sign, as columns headed "n (%)" print it; it is kept as text
+    and never used as a number. Nothing else may follow: a footnote mark (``38*``) makes the cell unreadable, since it
+    might be a digit of the print.
     """
     cell = plain(text)
     if not cell:
@@ -53,12 +56,18 @@ def _reason(cell: str) -> str:
         return "too-large" if cell.isdecimal() and cell[0] != "0" else "not-a-count"
     if _NEGATIVE.fullmatch(cell):
         return "negative"
+    if _POINTED.fullmatch(cell):
+        return "point-in-thousands"
+    if _TWO_COUNTS.fullmatch(cell):
+        return "two-counts"
     return "decimal" if _DECIMAL.fullmatch(cell) else "not-a-count"
 
 
 def _unreadable(key: str, text: str, **facts: Fact) -> Unreadable:
     if key == "too-large":
         facts["limit"] = LARGEST_COUNT
+    if key == "point-in-thousands":
+        facts["comma"] = plain(text).replace(".", ",")
     return Unreadable(key=key, facts={"text": specimen(text), **facts})
 
 
