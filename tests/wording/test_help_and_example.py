@@ -9,7 +9,7 @@ import pytest
 
 from fourcount.stats.methods import METHODS, TESTS
 from fourcount.wording.example import worked_example
-from fourcount.wording.help import HEADINGS, limits_of_the_program, methods_and_sources
+from fourcount.wording.help import HEADINGS, limits_of_the_program, methods_and_sources, terms
 
 LIGHT = ("cautions", "facts", "gaps", "names", "numbers")
 OTHERS = ("example", "headline", "help", "limits", "lines", "meanings", "patient", "sentence", "working")
@@ -26,6 +26,26 @@ def test_help_lists_every_method_and_every_test_once():
 def test_every_measure_with_methods_has_a_heading():
     """A new measure needs its words."""
     assert {method.measure for method in METHODS} <= set(HEADINGS)
+
+
+@pytest.mark.parametrize(
+    "term",
+    [
+        "index group", "reference group", "event counted", "difference per 100", "NNTB", "NNTH", "through infinity",
+        "risk ratio", "odds ratio", "as a risk ratio at 12%", "interval", "level", "score", "textbook", "exact",
+        "starting risk", "on balance", "avoided", "added",
+    ],
+)  # fmt: skip
+def test_every_word_of_the_window_is_explained(term):
+    """Each term has an entry of its own, in whole sentences."""
+    explained = [text for name, text in terms() if term in name]
+    assert explained
+    assert all(text[0].isupper() and text.endswith(".") for text in explained)
+
+
+def test_the_rounding_of_a_number_needed_is_explained():
+    """Up, for harm as for benefit."""
+    assert "always rounded up, NNTB and NNTH alike" in dict(terms())["NNTB, NNTH"]
 
 
 def test_the_limits_of_the_program_are_whole_sentences():
