@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 METHOD_KEYS = {
-    "risk": {"wilson", "wilson-continuity", "clopper-pearson", "mid-p", "wald", "agresti-coull", "jeffreys"},
+    "risk": {"wilson", "wilson-continuity", "clopper-pearson", "mid-p", "wald", "logit", "agresti-coull", "jeffreys"},
     "risk_difference": {"newcombe", "miettinen-nurminen", "agresti-caffo", "wald"},
     "risk_ratio": {"koopman", "miettinen-nurminen", "katz"},
     "odds_ratio": {

@@ -45,7 +45,8 @@ def test_each_family_names_its_methods(appraised, family, methods):
     findings = appraised(*TABLE, family=family)
     keys = ("risk_index", "risk_difference", "risk_ratio", "odds_ratio")
     assert methods == (*(findings.measures[key].method for key in keys), findings.test.method)
-    assert methods[0] == findings.measures["odds_reference"].method
+    odds_method = "logit" if family == "textbook" else methods[0]
+    assert odds_method == findings.measures["odds_reference"].method
     assert methods[2] == findings.measures["other_risk_ratio"].method
 
 
@@ -74,12 +75,21 @@ def test_odds_are_infinite_where_everybody_has_the_event(appraised):
     assert (math.inf, math.inf) == (figure.estimate, figure.interval.high)
 
 
-@pytest.mark.parametrize(("cells", "key"), [((1, 9, 5, 5), "beyond-zero"), ((9, 1, 5, 5), "beyond-one")])
-def test_a_limit_that_is_no_risk_has_no_odds(appraised, cells, key):
-    """Wald's limit of 1/10 is below 0 and that of 9/10 above 100%: the interval of the odds is withheld, not cut."""
+@pytest.mark.parametrize("cells", [(1, 9, 5, 5), (9, 1, 5, 5)])
+def test_textbook_odds_have_limits_where_the_risks_are_impossible(appraised, cells):
+    """Wald's limit of 1/10 is below 0 and that of 9/10 above 100%; the odds have the logit limits, by hand."""
     figure = appraised(*cells, family="textbook").measures["odds_index"]
-    assert cells[0] / cells[1] == figure.estimate
-    assert Gap(key) == figure.interval
+    odds, half_width = cells[0] / cells[1], 1.959963984540054 * math.sqrt(1 / cells[0] + 1 / cells[1])
+    assert figure.method == "logit"
+    assert odds == figure.estimate
+    assert math.isclose(odds * math.exp(-half_width), figure.interval.low, rel_tol=1e-12)
+    assert math.isclose(odds * math.exp(half_width), figure.interval.high, rel_tol=1e-12)
+
+
+def test_textbook_odds_of_nobody_or_everybody_have_no_interval(appraised):
+    """0/20: the odds are 0, and the logit interval does not exist."""
+    figure = appraised(0, 20, 3, 17, family="textbook").measures["odds_index"]
+    assert (0.0, Gap("one-outcome")) == (figure.estimate, figure.interval)
 
 
 def test_an_estimate_can_be_a_gap_while_the_interval_stands(appraised):

@@ -60,6 +60,7 @@ def test_families_name_entries_of_the_table() -> None:
             key = getattr(family, measure)
             found = methods.method(measure, key)
             assert (found.measure, found.key) == (measure, key)
+        assert methods.method("risk", family.odds).key == family.odds
         assert methods.test(family.test).key == family.test
 
 

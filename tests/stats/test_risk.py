@@ -7,9 +7,11 @@ from collections.abc import Callable
 from typing import Any
 
 import mpmath
+import numpy as np
 import pytest
 from hypothesis import given, settings
 from hypothesis import strategies as st
+from statsmodels.discrete.discrete_model import Logit
 
 from fourcount.stats import risk
 from fourcount.stats.results import Gap, Interval
@@ -21,10 +23,12 @@ METHODS = (
     risk.clopper_pearson,
     risk.mid_p,
     risk.wald,
+    risk.logit,
     risk.agresti_coull,
     risk.jeffreys,
 )
-BETWEEN_0_AND_1 = tuple(method for method in METHODS if method is not risk.wald)
+NONE_AT_THE_ENDS = (risk.wald, risk.logit)
+WITH_LIMITS_AT_THE_ENDS = tuple(method for method in METHODS if method not in NONE_AT_THE_ENDS)
 Method = Callable[[int, int, float], Interval | Gap]
 
 GROUPS = st.tuples(
@@ -50,6 +54,12 @@ def _wald(x: Any, n: Any, z: Any) -> tuple[Any, Any]:
     return x / n - half_width, x / n + half_width
 
 
+def _logit(x: Any, n: Any, z: Any) -> tuple[Any, Any]:
+    factor = mpmath.exp(z * mpmath.sqrt(1 / x + 1 / (n - x)))
+    low, high = x / (n - x) / factor, x / (n - x) * factor
+    return low / (1 + low), high / (1 + high)
+
+
 def _agresti_coull(x: Any, n: Any, z: Any) -> tuple[Any, Any]:
     p = (x + z * z / 2) / (n + z * z)
     half_width = z * mpmath.sqrt(p * (1 - p) / (n + z * z))
@@ -62,6 +72,7 @@ def _agresti_coull(x: Any, n: Any, z: Any) -> tuple[Any, Any]:
         (risk.wilson, _wilson),
         (risk.wilson_continuity, _wilson_continuity),
         (risk.wald, _wald),
+        (risk.logit, _logit),
         (risk.agresti_coull, _agresti_coull),
     ],
 )
@@ -159,7 +170,7 @@ def test_no_event_in_closed_form() -> None:
     assert given_interval(risk.clopper_pearson(0, 10**9, 0.95)).high == pytest.approx(-math.log(0.025) * 1e-9, rel=1e-8)
 
 
-@pytest.mark.parametrize("method", BETWEEN_0_AND_1)
+@pytest.mark.parametrize("method", WITH_LIMITS_AT_THE_ENDS)
 @pytest.mark.parametrize("total", [1, 2, 20, 10**6, 2 * 10**9])
 def test_nobody_and_everybody_have_a_limit_of_their_own(method: Method, total: int) -> None:
     """No event: from exactly 0. Nothing but events: up to exactly 1."""
@@ -176,6 +187,21 @@ def test_the_bare_textbook_formula_gives_no_zero_width() -> None:
     assert given_interval(risk.wald(28, 29, 0.95)).high > 1
 
 
+@pytest.mark.parametrize(("events", "total"), [(1, 29), (38, 412), (70, 409), (9, 10)])
+def test_the_logit_interval_is_that_of_a_logistic_regression(events: int, total: int) -> None:
+    """statsmodels' logistic regression on nothing but an intercept has the same limits of the log odds."""
+    outcomes = np.repeat([1.0, 0.0], [events, total - events])
+    fitted = Logit(outcomes, np.ones(total)).fit(disp=False, tol=1e-14)
+    low, high = (1 / (1 + math.exp(-limit)) for limit in fitted.conf_int(alpha=0.05)[0])
+    interval = given_interval(risk.logit(events, total, 0.95))
+    assert (interval.low, interval.high) == pytest.approx((low, high), rel=1e-9)
+
+
+def test_the_logit_interval_does_not_exist_where_all_share_an_outcome() -> None:
+    """0/20 and 20/20: the log odds are infinite."""
+    assert risk.logit(0, 20, 0.95) == risk.logit(20, 20, 0.95) == Gap("one-outcome")
+
+
 @pytest.mark.parametrize("method", METHODS)
 def test_an_empty_group_has_no_interval(method: Method) -> None:
     """Nobody in the group: a gap."""
@@ -190,7 +216,7 @@ def test_intervals_hold_their_estimate_and_keep_to_0_and_1(group: tuple[int, int
     for method in METHODS:
         interval = method(events, total, level)
         if isinstance(interval, Gap):
-            assert method is risk.wald
+            assert method in NONE_AT_THE_ENDS
             continue
         assert interval.low <= events / total <= interval.high
         assert interval.low < interval.high

@@ -115,20 +115,18 @@ def _risk(table: Table, events: int, total: int) -> Figure:
 
 
 def _odds(table: Table, events: int, total: int) -> Figure:
-    """Odds with the limits of the risk, each mapped p/(1-p): the map is monotone, so the coverage is the same."""
-    key = FAMILIES[table.choices.family].risk
+    """Odds with the limits of the risk, each mapped p/(1-p): the map is monotone, so the coverage is the same.
+
+    The textbook family takes the limits of its own method for odds, since Wald's can lie where no odds are.
+    """
+    key = FAMILIES[table.choices.family].odds
     interval = _as_odds(_interval(table, "risk", key, events, total))
     return Figure(estimate=estimates.odds(events, total), interval=interval, method=key)
 
 
 def _as_odds(interval: Interval | Gap) -> Interval | Gap:
-    """The limits of odds; none where the bare textbook formula left 0 to 100%, since no odds lie there."""
     if isinstance(interval, Gap):
         return interval
-    if interval.low < 0:
-        return Gap("beyond-zero")
-    if interval.high > 1:
-        return Gap("beyond-one")
     low, high = (risk / (1 - risk) if risk < 1 else math.inf for risk in (interval.low, interval.high))
     return Interval(low=low, high=high, adjusted=interval.adjusted)
 

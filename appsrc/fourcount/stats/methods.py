@@ -25,14 +25,18 @@ TESTS: tuple[Test, ...] = ASSOCIATION_TESTS
 FAMILIES: dict[str, Family] = {
     "score": Family(
         risk="wilson",
+        odds="wilson",
         risk_difference="miettinen-nurminen",
         risk_ratio="miettinen-nurminen",
         odds_ratio="miettinen-nurminen",
         test="n-minus-1",
     ),
-    "textbook": Family(risk="wald", risk_difference="wald", risk_ratio="katz", odds_ratio="woolf", test="pearson"),
+    "textbook": Family(
+        risk="wald", odds="logit", risk_difference="wald", risk_ratio="katz", odds_ratio="woolf", test="pearson"
+    ),
     "exact": Family(
         risk="clopper-pearson",
+        odds="clopper-pearson",
         risk_difference="miettinen-nurminen",
         risk_ratio="miettinen-nurminen",
         odds_ratio="conditional-exact",

@@ -16,6 +16,7 @@ GAP_KEYS = (
     "no-events",  # no event in either group: the ratio and the odds ratio are 0/0
     "no-non-events",  # everybody had the event: the odds ratio is 0/0
     "zero-width",  # the bare formula would give an interval of zero width
+    "one-outcome",  # nobody, or everybody, in the group had the event: its log odds are infinite
     "beyond-one",  # a risk would pass 100%
     "undetermined-at-baseline",  # an infinite effect at a starting risk of 0, or an odds ratio of 0 at a risk of 1
     "beyond-zero",  # a risk would fall below 0

@@ -71,6 +71,21 @@ def wald(events: int, total: int, level: float) -> Interval | Gap:
     return Interval(low=events / total - half_width, high=events / total + half_width)
 
 
+def logit(events: int, total: int, level: float) -> Interval | Gap:
+    """The textbook interval of odds, o exp(-+ z sqrt(1/x + 1/(n-x))), each limit turned into the risk o/(1+o).
+
+    It stays between 0 and 1, where Wald's does not. At no events and at no others it does not exist: a gap. Source:
+    one group's part of Woolf's interval (1955); Newcombe 2001, Am Stat 55:200 (from memory).
+    """
+    if total == 0:
+        return Gap("empty-group")
+    if events in (0, total):
+        return Gap("one-outcome")
+    others = total - events
+    factor = math.exp(quantile(level) * math.sqrt(1 / events + 1 / others))
+    return Interval(low=events / (events + others * factor), high=events * factor / (events * factor + others))
+
+
 def agresti_coull(events: int, total: int, level: float) -> Interval | Gap:
     """Agresti and Coull's interval (1998, Am Stat 52:119): Wald's after adding z^2/2 events and z^2/2 others.
 

@@ -15,6 +15,8 @@ GAP_TEXTS = {
     "no-events": "Nobody in either group had the event, so this figure is not determined.",
     "no-non-events": "Everybody in both groups had the event, so this figure is not determined.",
     "zero-width": "An interval of zero width is withheld; the score family gives a real one.",
+    "one-outcome": "Nobody, or everybody, here had the event, where textbook odds have no interval; "
+    "the score family gives one.",
     "beyond-one": "The risk would pass 100% here; where a risk ratio is carried, the odds ratio can be.",
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     # the design, the table, the patient

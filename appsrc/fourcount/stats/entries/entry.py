@@ -46,6 +46,7 @@ class Family:
     """The keys of the methods that one choice of the reader brings together."""
 
     risk: str
+    odds: str  # the method of the risk whose limits, turned into odds, are those of the odds
     risk_difference: str
     risk_ratio: str
     odds_ratio: str

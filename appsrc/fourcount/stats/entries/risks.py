@@ -57,6 +57,15 @@ RISK_METHODS = (
         note="Can pass 0 or 100% and is given as it is. At 0 or n events its width would be zero, so none is given.",
     ),
     Method(
+        key="logit",
+        measure="risk",
+        interval=risk.logit,
+        title="Logit",
+        formula="The odds o = x/(n−x) with limits o exp(∓ z √(1/x + 1/(n−x))), each turned into the risk o/(1+o)",
+        source="Woolf 1955, the part of one group; Newcombe 2001, Am Stat 55:200, from memory",
+        note="The textbook interval of odds. At 0 or n events it does not exist, so none is given.",
+    ),
+    Method(
         key="agresti-coull",
         measure="risk",
         interval=risk.agresti_coull,
