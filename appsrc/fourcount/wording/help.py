@@ -18,31 +18,31 @@ TERMS = (
     (
         "index group, reference group",
         (
-            "The index group had what the study looks at: a treatment or an exposure. The reference group is what it is "
-            "compared with: a placebo, usual care, people without the exposure. Swap the groups if they stand the other "
-            "way round."
+            "The index group had what the study looks at: a treatment or an exposure. The reference group is what it "
+            "is compared with: a placebo, usual care, people without the exposure. Swap the groups if they stand the "
+            "other way round."
         ),
     ),
     (
         "event counted",
         (
-            "The one of the two outcomes that all figures count. It may be welcome or unwelcome. Count the other outcome "
-            "to turn every figure to the people who did not have this one."
+            "The one of the two outcomes that all figures count. It may be welcome or unwelcome. Count the other "
+            "outcome to turn every figure to the people who did not have this one."
         ),
     ),
     (
         "difference per 100",
         (
-            "Of 100 people in the index group, how many more or fewer had the event than of 100 in the reference group. "
-            "It is a difference of two percentages, in percentage points; it is not a percentage of the risk."
+            "Of 100 people in the index group, how many more or fewer had the event than of 100 in the reference "
+            "group. It is a difference of two percentages, in percentage points; it is not a percentage of the risk."
         ),
     ),
     (
         "NNTB, NNTH",
         (
             "Number needed to treat for one more person to benefit, or for one to be harmed: one divided by the "
-            "difference. It belongs to a comparison, a time span and a starting risk. Here it and its limits are always "
-            "rounded up, NNTB and NNTH alike."
+            "difference. It belongs to a comparison, a time span and a starting risk. Here it and its limits are "
+            "always rounded up, NNTB and NNTH alike."
         ),
     ),
     (
@@ -56,59 +56,63 @@ TERMS = (
     (
         "risk ratio",
         (
-            "The risk in the index group divided by that in the reference group; 1 is no effect, and 0.54 is a relative "
-            "reduction of 46%. By itself it does not say how large the risks are. In a survey it is a prevalence ratio."
+            "The risk in the index group divided by that in the reference group; 1 is no effect, and 0.54 is a "
+            "relative reduction of 46%. By itself it does not say how large the risks are. In a survey it is a "
+            "prevalence ratio."
         ),
     ),
     (
         "odds ratio, and as a risk ratio at 12%",
         (
-            "Odds are people with the event for each person without it; the odds ratio compares the odds of two groups. "
-            "It always lies farther from 1 than the risk ratio, the farther the more common the event. “As a risk ratio "
-            "at 12%” says what it comes to where 12 in 100 have the event without the index treatment or exposure."
+            "Odds are people with the event for each person without it; the odds ratio compares the odds of two "
+            "groups. It always lies farther from 1 than the risk ratio, the farther the more common the event. “As a "
+            "risk ratio at 12%” says what it comes to where 12 in 100 have the event without the index treatment or "
+            "exposure."
         ),
     ),
     (
         "interval, level",
         (
-            "All values that the study’s numbers are compatible with at the level chosen. At 95%, intervals made in this "
-            "way hold the true value in about 95 of 100 studies, if nothing but the play of small numbers is at work."
+            "All values that the study’s numbers are compatible with at the level chosen. At 95%, intervals made in "
+            "this way hold the true value in about 95 of 100 studies, if nothing but the play of small numbers is at "
+            "work."
         ),
     ),
     (
         "score intervals",
         (
-            "The default: they keep close to their level also with few events and zeros. Difference, ratios and p never "
-            "disagree about no effect."
+            "The default: they keep close to their level also with few events and zeros. Difference, ratios and p "
+            "never disagree about no effect."
         ),
     ),
     (
         "textbook intervals",
         (
-            "The bare formulas that papers usually print, to check a paper’s own figures with. With few events those of a "
-            "risk and of a difference are too narrow, and with zeros the ratios need a correction, said beside them."
+            "The bare formulas that papers usually print, to check a paper’s own figures with. With few events those "
+            "of a risk and of a difference are too narrow, and with zeros the ratios need a correction, said beside "
+            "them."
         ),
     ),
     (
         "exact intervals",
         (
-            "They never fall short of their level, and so are often wider than need be. There is none for a difference "
-            "or a risk ratio here: those rows then say “score, approximate”."
+            "They never fall short of their level, and so are often wider than need be. There is none for a "
+            "difference or a risk ratio here: those rows then say “score, approximate”."
         ),
     ),
     (
         "starting risk",
         (
-            "How many of 100 people such as this patient have the event without the index treatment or exposure, in the "
-            "study’s time span. It is the reference group’s own unless you type one, with its source; the effect is then "
-            "assumed to be the same there."
+            "How many of 100 people such as this patient have the event without the index treatment or exposure, in "
+            "the study’s time span. It is the reference group’s own unless you type one, with its source; the effect "
+            "is then assumed to be the same there."
         ),
     ),
     (
         "avoided, added, on balance",
         (
-            "How many fewer, or more, people in the picture have the event with the index treatment. Only the balance is "
-            "known: some may gain while others lose, and nobody can be pointed to."
+            "How many fewer, or more, people in the picture have the event with the index treatment. Only the balance "
+            "is known: some may gain while others lose, and nobody can be pointed to."
         ),
     ),
 )
