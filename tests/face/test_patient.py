@@ -74,8 +74,8 @@ def test_a_starting_risk_keeps_its_source(example: Hands) -> None:
     assert example.window.session.outcome.patient.starting_risk_source_text == "own ward"
 
 
-def test_a_typed_starting_risk_says_what_the_range_leaves_out(example: Hands) -> None:
-    """A bare risk has no range of its own, and the effect is assumed to be the same there."""
+def test_a_typed_starting_risk_says_what_the_interval_leaves_out(example: Hands) -> None:
+    """A bare risk has no interval of its own, and the effect is assumed to be the same there."""
     example.write(example.window.patient.baseline, "12%")
     assert "leaves out that 12% is itself uncertain" in example.window.patient.detail.text()
     assert any("assumed to be the same at 12%" in text for text in example.window.cautions.texts)
@@ -143,7 +143,7 @@ def test_bars_instead_of_people_and_back(example: Hands) -> None:
 
 
 def test_the_picture_is_said_in_full(example: Hands) -> None:
-    """A screen reader hears both groups, both frames, the change, its range, and that nobody can be pointed to."""
+    """A screen reader hears both groups, both frames, the change, its interval, and that nobody can be pointed to."""
     example.write(example.window.patient.baseline, "12%")
     view = example.window.patient.picture
     said = view.accessibleDescription()
@@ -155,7 +155,7 @@ def test_the_picture_is_said_in_full(example: Hands) -> None:
         "6 (6%)",
         "94 did not",
         "6 fewer in 100",
-        "interval",
+        "95% interval 3 to 8",
         WHICH_PEOPLE,
     ):
         assert part in said
@@ -175,3 +175,20 @@ def test_the_key_to_the_starting_risk_selects_it(example: Hands) -> None:
     example.do("baseline")
     example.type("20%")
     assert example.window.patient.baseline.text() == "20%"
+
+
+def test_a_copied_picture_says_what_it_rests_on(example: Hands) -> None:
+    """Its first line is the starting risk with its source, and the effect kept constant."""
+    example.write(example.window.patient.baseline, "12%")
+    example.write(example.window.patient.source, "ward audit 2025")
+    assert drawn(example).words.lines[0] == (
+        "Starting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant."
+    )
+    assert example.window.patient.summary.text().startswith("6 fewer in 100")
+
+
+def test_a_survey_carries_a_prevalence_ratio(example: Hands) -> None:
+    """The choice of effect is called as the row is."""
+    example.choose(example.window.printed.design, "cross-sectional survey")
+    effect = example.window.patient.effect
+    assert [effect.itemText(i).split(" ", 1)[0] for i in range(effect.count())] == ["prevalence", "odds"]

@@ -18,6 +18,8 @@ WRONG = [
     ("4.5", "4.5: people are counted whole, without decimals"),
     ("1000000000000", "1000000000000: a count goes up to 1,000,000,000"),
     ("500/412", "500/412: more events than people; the events have to fit into the total"),
+    ("1.204", "1.204: people are counted whole; a thousands mark is a comma, as in 1,204"),
+    ("38, 374", "38, 374: one count in each cell"),
     ("38*", "38*: a whole number of people is needed, such as 38"),
     ("9999999999999999999999999999", "9999999999999999999999999999: a count goes up to 1,000,000,000"),
 ]
@@ -33,7 +35,7 @@ def test_a_wrong_count_is_kept_marked_and_explained(example: Hands, typed: str, 
     assert example.notes == [sentence]
     assert cells[CELLS[0]].accessibleDescription() == sentence
     assert example.rows == {}
-    assert example.sentence == "A cell of the table cannot be read as a count; the mark beside it says why."
+    assert example.sentence == "A cell of the table cannot be used; the mark beside it says why."
     assert not example.window.patient.picture.isVisible()
 
 
