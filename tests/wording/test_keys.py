@@ -153,6 +153,22 @@ def test_a_caution_says_the_numbers_it_is_about():
     assert text == "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%."
 
 
+def test_what_was_added_is_said_as_it_was():
+    """Walter adds to events and people, Gart to all four counts, and neither alters the estimate."""
+    ratio, odds_ratio = (
+        cautions.caution_text(Caution(key="half-added", facts={"measure": measure}))
+        for measure in ("risk_ratio", "odds_ratio")
+    )
+    assert ratio == (
+        "Because of a count of 0, the textbook interval of the risk ratio is that with half added to the events and to "
+        f"the people of each group (Walter). {cautions.PLAIN_ESTIMATE}"
+    )
+    assert odds_ratio == (
+        "Because of a count of 0, the textbook interval of the odds ratio is that with half added to each of the four "
+        f"counts (Gart). {cautions.PLAIN_ESTIMATE}"
+    )
+
+
 @pytest.mark.parametrize("key", ["effect-kept-constant", "odds-ratio-differs", "half-added"])
 def test_in_a_survey_the_ratio_is_one_of_prevalences(key):
     """The cautions call it as the rows do."""

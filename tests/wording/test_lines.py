@@ -80,7 +80,13 @@ def test_the_exact_family_says_where_it_is_not_exact(outcome_of, findings_of):
 def test_a_correction_in_use_is_said_beside_the_figure(outcome_of, findings_of):
     """Zeros are never edited in silence."""
     lines = lines_of(outcome_of((0, 50, 7, 43)), findings_of, Choices(family="textbook"))
-    assert lines["odds_ratio"].note == "adjusted: half added to each count"
+    assert lines["odds_ratio"].note == (
+        "interval with half added to each of the four counts (Gart): it need not hold the estimate"
+    )
+    assert lines["risk_ratio"].note == (
+        "interval with half added to the events and to the people of each group (Walter): it need not hold the "
+        "estimate; relative reduction 100%; ratio of the other outcome 1.16 (1.04 to 1.30)"
+    )
     assert lines["risk_index"].interval == "withheld"
     assert lines["risk_index"].note.startswith("An interval of zero width is withheld")
 

@@ -266,3 +266,11 @@ def test_headline_and_patient_speak_of_the_same_people(outcome_of, findings_of, 
     assert COLUMNS_OF_WORDS[said] == drawn
     share = counts[2 if drawn == "left" else 3] / (counts[2] + counts[3])
     assert int(n) == pytest.approx(1_000 * share, abs=0.51)
+
+
+@pytest.mark.parametrize("starting_risk", ["", "12%"])
+def test_an_interval_of_altered_counts_is_left_out_of_the_relative_words(outcome_of, findings_of, starting_risk):
+    """0/50 v 7/50 by the textbook: "100% lower (99% lower to 12% higher)" would not hold its own estimate."""
+    outcome = outcome_of((0, 50, 7, 43), patient=Patient(starting_risk_text=starting_risk))
+    choices = Choices(family="textbook")
+    assert "In relative words 100% lower." in patient_words(outcome, findings_of(outcome, choices), choices, 100).detail

@@ -78,7 +78,9 @@ def test_the_p_values_of_all_tests_stand_together(outcome_of, findings_of):
 def test_a_correction_is_said_in_the_row_of_its_method(outcome_of, findings_of):
     """Also where it is not the family's own method."""
     rows = rows_of("odds_ratio", outcome_of((0, 50, 7, 43)), findings_of)
-    assert rows["Woolf logit"].endswith("(adjusted: half added to each count)")
+    assert rows["Woolf logit"].endswith(
+        "(interval with half added to each of the four counts (Gart): it need not hold the estimate)"
+    )
 
 
 def test_what_cannot_be_worked_out_is_a_sentence(outcome_of, findings_of):

@@ -7,6 +7,7 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
 from fourcount.wording.gaps import gap_text
+from fourcount.wording.half_added import half_added
 from fourcount.wording.lines import MeasureLine, measure_lines
 
 ORDER = ("risk_reference", "risk_index", "risk_difference", "number_needed", "risk_ratio", "odds_ratio")
@@ -67,8 +68,7 @@ def _more(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings)
     counts = findings.counts
     if isinstance(counts, Gap):
         return ()
-    adjusted = isinstance(figure.interval, Gap) or figure.interval.adjusted is None
-    more = ["" if adjusted else lines.HALF_ADDED]
+    more = [half_added(figure)]
     if key == "risk_reference":
         more.append(f"{numbers.whole(counts.reference_events)} of {numbers.whole(counts.reference_total)}")
     if key == "risk_index":

@@ -25,13 +25,13 @@ from fourcount.wording import labels, lines, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.gaps import gap_text, limit_text
+from fourcount.wording.half_added import half_added
 
 Row = tuple[str, str, str, str, str]
 
 HEAD: Row = ("measure", "estimate", "low", "high", "method")
 INFINITY = "infinity"
 THROUGH_INFINITY = "the interval runs through infinity"
-HALF_ADDED = "half added to each count"
 UNROUNDED = "Risks and differences are fractions, index minus reference; all figures are unrounded. Level {level}."
 P_NAME = "p, two-sided"
 CONVERTED = "Odds ratio as a risk ratio at {baseline}"
@@ -108,11 +108,10 @@ def _measure(name: str, measure: Figure | AnyNumberNeeded | Gap) -> Row:
 def _figure(name: str, figure: Figure) -> Row:
     interval = figure.interval
     low, high = (interval, interval) if isinstance(interval, Gap) else (interval.low, interval.high)
-    adjusted = "" if isinstance(interval, Gap) or interval.adjusted is None else HALF_ADDED
     say = limit_text if isinstance(interval, Range) else gap_text
     reasons = [gap_text(figure.estimate)] if isinstance(figure.estimate, Gap) else []
     reasons += [say(limit) for limit in (low, high) if isinstance(limit, Gap)]
-    method = "; ".join(part for part in (figure.method, adjusted, *dict.fromkeys(reasons)) if part)
+    method = "; ".join(part for part in (figure.method, half_added(figure), *dict.fromkeys(reasons)) if part)
     return (name, _number(figure.estimate), _number(low), _number(high), method)
 
 

@@ -4,10 +4,15 @@ from __future__ import annotations
 
 from fourcount.appraisal.findings import Caution
 from fourcount.wording.facts import told
+from fourcount.wording.half_added import GART, WALTER
 from fourcount.wording.standing import STANDING, STANDING_FULL
 
 __all__ = ["STANDING", "STANDING_FULL", "TEXTS", "caution_text", "caution_title"]
 
+PLAIN_ESTIMATE = (
+    "The estimate stays as it is; the interval is centred on the altered one and need not hold an estimate of 0 or "
+    "infinity."
+)
 TEXTS = {
     "read-as": ("How a count was read", "{text} is read as {value}; two counts need two cells."),
     "percent-disagrees": (
@@ -71,7 +76,7 @@ TEXTS = {
     ),
     "half-added": (
         "Half added",
-        "Because of a count of 0, half was added to each count for the textbook {measure} and its interval.",
+        f"Because of a count of 0, the textbook interval of the {{measure}} is that with {GART}. {PLAIN_ESTIMATE}",
     ),
     "through-no-effect": (
         "No effect is inside the interval",
@@ -93,6 +98,9 @@ TEXTS = {
         ),
     ),
 }
+HALF_ADDED_TO_A_RATIO = (
+    f"Because of a count of 0, the textbook interval of the {{measure}} is that with {WALTER}. {PLAIN_ESTIMATE}"
+)
 UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
 SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or infinity are shown as they are."
 
@@ -101,6 +109,8 @@ def caution_text(caution: Caution) -> str:
     """The caution as one plain sentence with its numbers in it."""
     if caution.key == "zero-cells" and caution.facts.get("count", 1) != 1:
         return told(SEVERAL_ZEROS, caution.facts)
+    if caution.key == "half-added" and caution.facts.get("measure") == "risk_ratio":
+        return told(HALF_ADDED_TO_A_RATIO, caution.facts)
     return told(TEXTS.get(caution.key, UNKNOWN)[1], caution.facts)
 
 

@@ -11,6 +11,7 @@ from fourcount.record.paper import Choices
 from fourcount.stats.number_needed import whole_number_needed
 from fourcount.wording import limits, names, numbers
 from fourcount.wording.gaps import gap_text
+from fourcount.wording.half_added import half_added
 
 Kind = Literal["difference", "risk", "ratio", ""]
 LineGroup = Literal["main", "more"]
@@ -36,7 +37,6 @@ KINDS: dict[str, Kind] = {
 UNDER_THE_FOLD = ("odds_reference", "odds_index")
 
 NO_SPAN = "time span not given"
-HALF_ADDED = "adjusted: half added to each count"
 PAST_EVERYBODY = "the bare formula reaches past 100 in 100"
 PAST_A_RISK = {
     "low": "the bare formula reaches below 0%",
@@ -193,7 +193,7 @@ def _detail(key: str, counts: Counts, choices: Choices) -> str:
 
 
 def _note(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings) -> str:
-    fragments = [_adjusted(figure), _beyond(key, figure)]
+    fragments = [half_added(figure), _beyond(key, figure)]
     if key == "risk_ratio":
         fragments += [_relative_note(figure), _other_outcome_note(findings.measures["other_risk_ratio"])]
     if key == "odds_ratio":
@@ -205,10 +205,6 @@ def _note(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings)
     return " ".join(part for part in (fragment, *dict.fromkeys(sentences)) if part)
 
 
-def _adjusted(figure: Figure) -> str:
-    return HALF_ADDED if not isinstance(figure.interval, Gap) and figure.interval.adjusted == "half" else ""
-
-
 def _beyond(key: str, figure: Figure) -> str:
     """What has to be said beside a limit that no risk, and no difference of risks, can have."""
     if key == "risk_difference":
@@ -218,17 +214,19 @@ def _beyond(key: str, figure: Figure) -> str:
 
 
 def _relative_note(figure: Figure) -> str:
+    """The relative words; an interval that need not hold the estimate is not turned into words around it."""
     if isinstance(figure.estimate, Gap) or not limits.relative(figure.estimate):
         return ""
-    interval = limits.relative_interval(figure.interval, figure.estimate)
+    interval = "" if half_added(figure) else limits.relative_interval(figure.interval, figure.estimate)
     return f"{limits.relative(figure.estimate)}{f': {interval}' if interval else ''}"
 
 
 def _other_outcome_note(figure: Figure | AnyNumberNeeded | Gap) -> str:
     if not isinstance(figure, Figure) or isinstance(figure.estimate, Gap):
         return ""
-    interval = limits.ratio_interval(figure.interval, figure.estimate)
-    return f"ratio of the other outcome {numbers.ratio(figure.estimate)}{limits.bracketed(interval)}"
+    parts = (limits.ratio_interval(figure.interval, figure.estimate), half_added(figure))
+    interval = limits.bracketed("; ".join(part for part in parts if part))
+    return f"ratio of the other outcome {numbers.ratio(figure.estimate)}{interval}"
 
 
 def conversion_text(conversion: Conversion | Gap, risk: str) -> str:

@@ -12,6 +12,7 @@ from fourcount.record.paper import Choices, Record
 from fourcount.wording import carried, limits, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.gaps import gap_text
+from fourcount.wording.half_added import half_added
 
 LONGEST_KEY = 40
 TOO_SMALL = "too small to draw"
@@ -168,7 +169,7 @@ def _relative(named: Outcome, ratio: Figure) -> str:
     if change in (0.0, float("inf")):
         return ""
     word = limits.LOWER if change < 0 else limits.HIGHER
-    interval = limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
+    interval = "" if half_added(ratio) else limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
     if named.welcome:
         return (
             f"The welcome outcome itself is, in relative words, {numbers.percent_whole(abs(change))} {word}{interval}."

@@ -12,6 +12,7 @@ from fourcount.record.paper import Choices
 from fourcount.stats.methods import METHODS, TESTS, Method, Test, method, test
 from fourcount.wording import limits, lines, names, numbers
 from fourcount.wording.gaps import gap_text
+from fourcount.wording.half_added import half_added_by
 from fourcount.wording.numbers import plain, whole
 from fourcount.wording.sentence import measure_sentence, p_sentence
 
@@ -148,7 +149,7 @@ def _interval_rows(
         shown, figure = limits.number_needed_interval(found), findings.measures["risk_difference"]
     else:
         gap = gap_text(found.interval) if isinstance(found.interval, Gap) else ""
-        shown, figure = gap or _interval(measure, found.interval, found), found
+        shown, figure = gap or _interval(measure, found.interval, found, found.method), found
     rows = [(label, shown)]
     if measure in BY_LIMITS:
         rows.append(("How", BY_LIMITS[measure]))
@@ -162,11 +163,12 @@ def _about(entry: Method | Test) -> list[Row]:
     return [(label, text) for label, text in rows if text]
 
 
-def _interval(measure: str, interval: limits.AnyInterval, figure: Figure) -> str:
+def _interval(measure: str, interval: limits.AnyInterval, figure: Figure, method_key: str) -> str:
+    """One method's interval with the rounding of the figure that is shown."""
     if isinstance(interval, Gap):
         return gap_text(interval)
     text = lines.interval_text(measure, Figure(estimate=figure.estimate, interval=interval, method=figure.method))
-    return f"{text} ({lines.HALF_ADDED})" if interval.adjusted == "half" else text
+    return f"{text}{limits.bracketed(half_added_by(method_key, interval))}"
 
 
 def _other_methods(measure: str, counts: Counts, findings: OutcomeFindings, choices: Choices) -> list[Row]:
@@ -179,7 +181,7 @@ def _other_methods(measure: str, counts: Counts, findings: OutcomeFindings, choi
         if entry.measure != METHOD_MEASURES[measure] or entry.key == figure.method:
             continue
         interval = entry.interval(*_arguments(measure, counts), choices.level)
-        rows.append((entry.title, _interval(measure, interval, figure)))
+        rows.append((entry.title, _interval(measure, interval, figure, entry.key)))
     return rows
 
 
