@@ -115,6 +115,8 @@ def test_a_shared_reason_is_said_once() -> None:
     assert gap == findings.measures["risk_ratio"]
     reason = gap_text(gap)
     assert letter(outcome).count(reason) == 1
+    survey = letter(outcome_of((38, 374, 70, 339), design="survey", risk="12%"))
+    assert survey.count("gives no number needed to treat") == 1
     assert " ".join(on_screen(outcome).split()).count(reason) == 1
 
 

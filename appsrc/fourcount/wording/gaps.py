@@ -32,7 +32,7 @@ GAP_TEXTS = {
     "baseline-unreadable": "The starting risk cannot be read; 12% or 12 in 100 would do.",
     "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
     "undetermined-at-baseline": "An effect of 0 or infinity says nothing at a starting risk of 0% or 100%.",
-    "bare-starting-risk": "The starting risk was typed without a range of its own.",
+    "bare-starting-risk": "The starting risk was typed without an interval of its own.",
     "formula-beyond-one": "The bare formula’s limit passes 100%, where no risk lies; the score intervals do not.",
     "formula-beyond-risks": "The bare formula’s limit parts the two risks farther than they can lie apart; "
     "the score intervals do not.",
