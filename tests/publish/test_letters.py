@@ -164,6 +164,30 @@ def test_a_letter_of_a_welcome_event_speaks_of_the_event() -> None:
     assert letter(OUTCOME).count("For one patient: at the study’s own starting risk. The study’s figures hold") == 1
 
 
+@pytest.mark.parametrize("welcome", [True, False])
+@pytest.mark.parametrize("named", ["left_words_text", "right_words_text", "span_text"])
+@pytest.mark.parametrize(("counted", "without", "with_"), [("left", 51, 60), ("right", 49, 40)])
+def test_every_copy_counts_the_same_people(welcome: bool, named: str, counted: str, without: int, with_: int) -> None:
+    """Counts, headline and patient of the letter, and the sheet, stand beside the words of one and the same column."""
+    plain = outcome_of((60, 40, 51, 49), risk=f"{without}%")
+    outcome = msgspec.structs.replace(plain, counted=counted, left_welcome=welcome, **{named: "xyz"})
+    words = {
+        ("left", "left_words_text"): "xyz",
+        ("right", "left_words_text"): "did not have the outcome “xyz”",
+        ("left", "right_words_text"): "did not have the outcome “xyz”",
+        ("right", "right_words_text"): "xyz",
+        ("left", "span_text"): "had the event",
+        ("right", "span_text"): "did not have the event",
+    }[counted, named]
+    text = letter(outcome)
+    assert f"Reference group: {without} {words}, " in text
+    assert f"Index group: {with_} {words}, " in text
+    assert f"Of 100 people in the reference group about {without} {words}" in text
+    assert f"Of 100 people in the reference group {without} {words}" in text
+    assert f"of 100 in the index group {with_}: " in text
+    assert (f"People in the index group who {words}", str(with_), "", "", "") in table_of(outcome)
+
+
 def test_a_full_stop_in_a_name_breaks_no_sentence() -> None:
     """Typed at the end of a name, it stands nowhere inside a sentence of ours."""
     text = letter(outcome_of((38, 374, 70, 339), label="Name.", risk="12%"))

@@ -12,7 +12,10 @@ from fourcount.wording.example import worked_example
 from fourcount.wording.help import HEADINGS, limits_of_the_program, methods_and_sources, terms
 
 LIGHT = ("cautions", "facts", "gaps", "names", "numbers")
-OTHERS = ("example", "headline", "help", "limits", "lines", "meanings", "patient", "sentence", "working")
+OTHERS = (
+    "basis", "carried", "example", "headline", "help", "limits", "lines", "meanings", "patient", "patient_sentence",
+    "sentence", "working",
+)  # fmt: skip
 
 
 def test_help_lists_every_method_and_every_test_once():
