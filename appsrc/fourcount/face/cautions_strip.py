@@ -16,8 +16,8 @@ from fourcount.wording import labels
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
 
-SAID_BESIDE = ("baseline-uncertain",)
-"""Cautions that the third column says in full beside the figure they concern."""
+SAID_BESIDE = ("baseline-uncertain", "percent-disagrees", "read-as")
+"""Cautions that stand in full beside the figure or the cell they concern."""
 
 HIGHEST_SHARE = 0.24
 """The largest share of the window's height that the strip takes before it scrolls."""

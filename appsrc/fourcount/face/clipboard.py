@@ -16,6 +16,10 @@ if TYPE_CHECKING:
     from fourcount.ink.picture import Picture
 
 
+SAID = "baseline-uncertain"
+"""The caution that the picture's own lines say already."""
+
+
 def copy_text(session: Session) -> bool:
     """Put the findings as plain text on the clipboard; False while there are none."""
     from fourcount.publish.prose import prose
@@ -50,7 +54,11 @@ def copy_picture(session: Session, picture: Picture | None, style: Style) -> boo
     if picture is None:
         return False
     heading = picture_heading(session.record, session.outcome)
-    cautions = [caution_text(caution) for caution in session.findings.cautions] if session.findings else []
+    cautions = (
+        [caution_text(caution) for caution in session.findings.cautions if caution.key != SAID]
+        if session.findings
+        else []
+    )
     foot = [*cautions, f"{STANDING} Fourcount {__version__}, {date.today():%Y-%m-%d}"]
     QGuiApplication.clipboard().setImage(as_image(picture, style, heading, "\n".join(foot)))
     return True

@@ -41,10 +41,13 @@ def ask_level(parent: QWidget, now: str, problem: str = "") -> str | None:
 
 def methods_window(look: Look, parent: QWidget) -> HelpWindow:
     """Every method with its formula and source, and what the program leaves out."""
-    from fourcount.wording.help import limits_of_the_program, methods_and_sources
+    from fourcount.wording.help import LETTERS, limits_of_the_program, methods_and_sources, terms
     from fourcount.wording.standing import STANDING_FULL
 
-    parts: list[Part] = []
+    parts: list[Part] = [("figure", labels.HELP_TERMS)]
+    for term, explanation in terms():
+        parts += [("strong", term), ("body", explanation)]
+    parts += [("figure", labels.HELP_LETTERS), ("body", LETTERS)]
     for heading, entries in methods_and_sources():
         parts.append(("figure", heading))
         for title, formula, source, note in entries:

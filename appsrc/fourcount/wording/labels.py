@@ -158,6 +158,8 @@ ABOUT = (
 )
 
 HELP_TITLES = {"methods": "Methods and sources", "keys": "Keys", "about": "About Fourcount"}
+HELP_TERMS = "What the words mean"
+HELP_LETTERS = "The letters in the formulas"
 HELP_LIMITS = "What this program leaves out, and what it is for"
 NO_KEYS = "menu only"
 
