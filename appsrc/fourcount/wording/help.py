@@ -122,8 +122,8 @@ TERMS = (
 LETTERS = (
     "a and b: people with and without the event in the index group; c and d: in the reference group. n1 = a + b, "
     "n2 = c + d, m = a + c, N: everybody. p1 = a/n1, p2 = c/n2; for a single risk x events among n people, p = x/n. "
-    "z: the standard normal quantile of the level, 1.96 at 95%. alpha: 1 minus the level. D0, R0 and psi: a difference, "
-    "a ratio and an odds ratio on trial; P1 and P2: the likeliest risks of the two groups under it."
+    "z: the standard normal quantile of the level, 1.96 at 95%. alpha: 1 minus the level. D0, R0 and psi: a "
+    "difference, a ratio and an odds ratio on trial; P1 and P2: the likeliest risks of the two groups under it."
 )
 
 
