@@ -11,13 +11,15 @@ from hypothesis import strategies as st
 from fourcount.record.outcome import EventsAndOthers
 from fourcount.record.paper import Choices
 from fourcount.wording import numbers
+from fourcount.wording.headline import DO_NOT_ADD_UP
 from fourcount.wording.patient import patient_words
-from fourcount.wording.sentence import headline
+from fourcount.wording.sentence import COMPATIBLE, headline
 
 cells = st.integers(min_value=0, max_value=10**9) | st.integers(min_value=0, max_value=60)
 PEOPLE = re.compile(
     r"Of (?P<of>[\d,]+) people .*? (?:about )?(?P<reference>[\d,]+|none|all) fell .*?; "
-    r"of (?P=of) .*? (?:about )?(?P<index>[\d,]+|none|all)\. (?:That is (?P<difference>[\d,]+) (?P<side>fewer|more))?"
+    r"of (?P=of) .*? (?:about )?(?P<index>[\d,]+|none|all)\. "
+    r"(?:That is (?P<difference>[\d,]+|under 1) (?P<side>fewer|more))?"
 )
 
 
@@ -119,21 +121,56 @@ def test_the_denominator_is_the_smallest_that_tells_the_truth(outcome_of, findin
 
 @given(st.tuples(cells, cells, cells, cells))
 def test_the_printed_numbers_add_up(outcome_of, findings_of, counts):
-    """The printed difference is the printed parts' own; nobody and everybody are only said of who they are."""
+    """The printed difference is the printed parts' own, or is said not to be; nobody and everybody are who they are.
+
+    Nobody has to picture more than 10,000 people, but where fewer would hide somebody.
+    """
     a, b, c, d = counts
     if a + b == 0 or c + d == 0:
         return
     outcome = outcome_of(counts)
-    match = PEOPLE.match(headline(outcome, findings_of(outcome), Choices()))
+    text = headline(outcome, findings_of(outcome), Choices())
+    match = PEOPLE.match(text)
     assert match is not None
     of = int(match["of"].replace(",", ""))
     words = {"none": "0", "all": str(of)}
     reference, index = (int(words.get(match[g], match[g]).replace(",", "")) for g in ("reference", "index"))
     assert (match["reference"] == "none", match["index"] == "none") == (c == 0, a == 0)
     assert (match["reference"] == "all", match["index"] == "all") == (d == 0, b == 0)
+    if of > 10_000:
+        assert any(0 < cell * 20_000 < n or 0 < (n - cell) * 20_000 <= n for cell, n in ((a, a + b), (c, c + d)))
     if a * d == b * c:
         assert reference == index
         assert match["difference"] is None
-    elif of < 10**9:
-        assert int(match["difference"].replace(",", "")) == abs(index - reference) > 0
-        assert match["side"] == ("fewer" if a * d < b * c else "more")
+        return
+    assert match["side"] == ("fewer" if a * d < b * c else "more")
+    difference = 0 if match["difference"] == "under 1" else int(match["difference"].replace(",", ""))
+    assert (difference == abs(index - reference)) != (DO_NOT_ADD_UP in text)
+    if of < 10_000:
+        assert difference == abs(index - reference) > 0
+
+
+@pytest.mark.parametrize(
+    ("counts", "ending"),
+    [
+        # 50.000% v 50.001% of ten million each: neither a million people nor a clause without an end.
+        (
+            (5_000_100, 4_999_900, 5_000_000, 5_000_000),
+            f"That is under 1 more, and could be anything from 4 fewer to 4 more (95% interval): {COMPATIBLE}.",
+        ),
+        # Both limits are 200 of 10,000: "as few as 2 or as many as 2" would say nothing, of 100 as of 10,000.
+        (
+            (20_000_000, 980_000_000, 0, 1_000_000_000),
+            "of 100 with night lights about 2. That is 2 more.",
+        ),
+        # 0.9 of 10,000, and in truth from 0.03 on.
+        (
+            (99_900, 9_900_100, 99_000, 9_901_000),
+            "about 100. That is 1 more, and could be from under 1 to 2 (95% interval).",
+        ),
+    ],
+)
+def test_a_clause_that_whole_people_cannot_tell_is_left_out(outcome_of, findings_of, counts, ending):
+    """Limits of 10,000 people that fall together, or onto no effect, are not said as if they did."""
+    outcome = outcome_of(counts)
+    assert headline(outcome, findings_of(outcome), Choices()).endswith(ending)

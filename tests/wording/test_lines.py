@@ -186,10 +186,10 @@ def test_each_limit_of_a_difference_has_the_word_it_needs(low, high, estimate, t
 @pytest.mark.parametrize(
     ("low", "high", "estimate", "text"),
     [
-        (0.02, Gap("beyond-one"), 0.05, "2.0 to no limit"),
-        (-0.02, Gap("beyond-one"), -0.01, "2.0 fewer to no limit"),
-        (Gap("beyond-one"), 0.02, 0.01, "no limit to 2.0 more"),
-        (Gap("beyond-one"), -0.02, -0.05, "2.0 to no limit"),
+        (0.02, Gap("beyond-one"), 0.05, "2.0 to past 100%"),
+        (-0.02, Gap("beyond-one"), -0.01, "2.0 fewer to past 100%"),
+        (Gap("beyond-one"), 0.02, 0.01, "past 100% to 2.0 more"),
+        (Gap("beyond-one"), -0.02, -0.05, "2.0 to past 100%"),
     ],
 )
 def test_a_limit_beyond_everybody_is_on_its_own_side_of_no_effect(low, high, estimate, text):

@@ -96,11 +96,11 @@ def test_counts_and_percentages_say_the_same(outcome_of, findings_of, denominato
 
 
 def test_what_cannot_be_drawn_is_still_said(outcome_of, findings_of):
-    """Text on the first number of people that tells the two risks apart."""
+    """Text on no more people than one can picture; what is too small to count is said to be."""
     words = words_of(outcome_of(patient=at("0.01%")), findings_of, None)
     assert words.scale == "Too small to draw as people."
-    assert (words.without_count, words.with_count) == ("10 in 100,000", "5 in 100,000")
-    assert words.summary_bold == "5 fewer in 100,000 fell at least once"
+    assert (words.without_count, words.with_count) == ("1 in 10,000", "1 in 10,000")
+    assert words.summary_bold == "under 1 fewer in 10,000 fell at least once"
 
 
 def test_a_larger_picture_is_announced(outcome_of, findings_of):
@@ -123,7 +123,7 @@ def test_a_limit_beyond_everybody_leaves_the_estimate(outcome_of, findings_of):
     """The range says that it has no upper limit, and why."""
     words = words_of(outcome_of(patient=at("45%"), index_group="second"), findings_of)
     assert words.with_count == "84 in 100"
-    assert words.summary == "over 12 months, 95% interval 13 to no limit"
+    assert words.summary == "over 12 months, 95% interval 13 to past 100%"
     assert words.detail.count("100%") == 1
     assert words.detail.endswith(
         "The upper limit of the risk would pass 100%, so the interval is open there; carrying the odds ratio avoids "
@@ -185,7 +185,7 @@ def test_summary_range_and_caution_look_the_same_way(outcome_of, findings_of, we
             )
             leaning = [caution for caution in findings_of(outcome).cautions if caution.key == "leans"]
             words = words_of(outcome, findings_of, 10_000)
-            ends = re.search(r"interval (?:([\d,]+) fewer) to (?:([\d,]+) more|no limit)$", words.summary)
+            ends = re.search(r"interval (?:([\d,]+) fewer) to (?:([\d,]+) more|past 100%)$", words.summary)
             side = re.match(r"[\d,]+ (fewer|more) ", words.summary_bold)
             if side is None or ends is None:
                 assert not leaning

@@ -1,8 +1,9 @@
 """How many people of a round number the headline speaks of, and what its numbers are.
 
 Whole people of 100, unless that would make different risks look alike, somebody nobody, nearly all
-all, or numbers that do not add up; then of 1,000, 10,000 and on. The difference is rounded from the
-difference itself, never taken from the rounded parts.
+all, or numbers that do not add up; then of 1,000 or 10,000. More than 10,000 people, whom nobody can picture,
+are spoken of only where somebody would be nobody, or nearly all all, among fewer. The difference is rounded from
+the difference itself, never taken from the rounded parts.
 """
 
 from __future__ import annotations
@@ -14,7 +15,8 @@ from fourcount.wording import numbers
 
 DENOMINATORS = tuple(10**power for power in range(2, 10))
 ONE_PERSON = 1 - 1e-9  # a difference of less than one whole person is not said in whole people
-FINEST_FOR_LIMITS = 10_000  # for an interval's sake alone the sentence does not leave numbers one can picture
+LARGEST_PICTURED = 10_000  # common practice: beyond it whole people say no more than a percentage does
+DO_NOT_ADD_UP = "Whole numbers are rounded, so they need not add up."
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
@@ -26,12 +28,23 @@ class People:
     index: int
     difference: int
 
+    @property
+    def add_up(self) -> bool:
+        """Whether the rounded difference is that of the rounded parts."""
+        return abs(self.reference - self.index) == self.difference
+
 
 def choose(reference: float, index: float, difference: float, interval: Interval | Range | Gap | None = None) -> People:
-    """The smallest denominator at which the sentence, with its interval if it has one, says only what is so."""
-    fitting = [d for d in DENOMINATORS if _true_at(d, reference, index, difference)] or [DENOMINATORS[-1]]
-    fine = [d for d in fitting if d <= FINEST_FOR_LIMITS and _limits_true_at(d, interval)]
-    denominator = fine[0] if fine else fitting[0]
+    """The smallest denominator at which the sentence, with its interval if it has one, says only what is so.
+
+    Where none to 10,000 does, the smallest from there on that calls nobody and everybody only who is: what is
+    too small to count then is "under 1", and numbers may not add up.
+    """
+    pictured = [d for d in DENOMINATORS if d <= LARGEST_PICTURED]
+    fitting = [d for d in pictured if _true_at(d, reference, index, difference)]
+    fine = [d for d in fitting if limits_apart(d, interval)]
+    whole = [d for d in DENOMINATORS if d >= LARGEST_PICTURED and _nobody_hidden(d, reference, index)]
+    denominator = (*fine, *fitting, *whole, DENOMINATORS[-1])[0]
     return People(
         denominator=denominator,
         reference=numbers.people(reference, denominator),
@@ -47,12 +60,17 @@ def _true_at(denominator: int, reference: float, index: float, difference: float
     return (
         abs(first - second) == apart
         and (difference == 0 or abs(difference) * denominator >= ONE_PERSON)
-        and all((n > 0) == (risk > 0) for n, risk in ((first, reference), (second, index)))
-        and all((n < denominator) == (risk < 1) for n, risk in ((first, reference), (second, index)))
+        and _nobody_hidden(denominator, reference, index)
     )
 
 
-def _limits_true_at(denominator: int, interval: Interval | Range | Gap | None) -> bool:
+def _nobody_hidden(denominator: int, *risks: float) -> bool:
+    """Whether somebody stays somebody, and nearly all stays under all."""
+    rounded = [(numbers.people(risk, denominator), risk) for risk in risks]
+    return all((n > 0) == (risk > 0) and (n < denominator) == (risk < 1) for n, risk in rounded)
+
+
+def limits_apart(denominator: int, interval: Interval | Range | Gap | None) -> bool:
     """Whether no limit is rounded to no effect, and the two do not fall together."""
     if interval is None or isinstance(interval, Gap):
         return True

@@ -10,7 +10,10 @@ from fourcount.wording import numbers
 AnyInterval = Interval | Range | Gap
 
 ROUNDING = 1e-12
-NO_LIMIT = "no limit"
+WITHHELD_ENDS = {"beyond-one": "past 100%", "formula-beyond-one": "past 100%", "beyond-zero": "below 0%"}
+"""Where a withheld limit would lie, by the reason; nobody is to read it as unlimited."""
+
+A_WITHHELD_LIMIT = "a withheld limit"
 LIMIT_WITHHELD = "limit withheld"
 LIMIT_IS_WITHHELD = "limit is withheld"
 FEWER = "fewer"
@@ -148,7 +151,7 @@ def _part(ratio: float) -> str:
 
 
 def _limit(limit: float | Gap, write: Callable[[float], str]) -> str:
-    return NO_LIMIT if isinstance(limit, Gap) else write(limit)
+    return WITHHELD_ENDS.get(limit.key, A_WITHHELD_LIMIT) if isinstance(limit, Gap) else write(limit)
 
 
 def _value(limit: NumberNeededLimit | Gap) -> str:

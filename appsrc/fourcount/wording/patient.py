@@ -13,12 +13,12 @@ from fourcount.wording import carried, limits, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
+from fourcount.wording.headline import DO_NOT_ADD_UP
 
 LONGEST_KEY = 40
 TOO_SMALL = "too small to draw"
 UNWELCOME_DRAWN = "Drawn: people with the unwelcome outcome."
 WHICH_PEOPLE = "We cannot say which people."
-DO_NOT_ADD_UP = "Whole numbers are rounded, so they need not add up."
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)

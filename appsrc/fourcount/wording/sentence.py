@@ -8,7 +8,7 @@ from fourcount.record.paper import Choices
 from fourcount.stats.methods import test
 from fourcount.wording import limits, lines, meanings, names, numbers
 from fourcount.wording.gaps import gap_text
-from fourcount.wording.headline import People, choose
+from fourcount.wording.headline import DO_NOT_ADD_UP, People, choose, limits_apart
 
 COMPATIBLE = "compatible with fewer and with more"
 UNDER_ONE = "under 1"
@@ -97,24 +97,28 @@ def _people_headline(outcome: Outcome, figures: tuple[Figure, Figure, Figure], c
     risk_reference, risk_index, gap = (x for x in estimates if not isinstance(x, Gap))
     people = choose(risk_reference, risk_index, gap, interval)
     of = f"Of {numbers.whole(people.denominator)} people {names.in_group(outcome, 'reference')}"
-    first = f"{of} {_about(people.reference, people)} {names.event_words(outcome)}"
+    first = f"{of} {_about(people.reference, risk_reference, people)} {names.event_words(outcome)}"
     span = names.within_span(outcome)
     second = (
         f"of {numbers.whole(people.denominator)} {names.in_group(outcome, 'index')} "
-        f"{'also ' if gap == 0 else ''}{_about(people.index, people)}"
+        f"{'also ' if gap == 0 else ''}{_about(people.index, risk_index, people)}"
     )
-    return f"{first}{f' {span}' if span else ''}; {second}. {_difference(gap, people, interval, choices)}"
+    rounding = "" if people.add_up else f" {DO_NOT_ADD_UP}"
+    said = f"{first}{f' {span}' if span else ''}; {second}."
+    return f"{said} {_difference(gap, people, interval, choices)}{rounding}"
 
 
-def _about(n: int, people: People) -> str:
+def _about(n: int, risk: float, people: People) -> str:
     if n in (0, people.denominator):
+        if 0 < risk < 1:
+            return UNDER_ONE if n == 0 else f"over {numbers.whole(n - 1)}"
         return "none" if n == 0 else "all"
     return f"about {numbers.whole(n)}"
 
 
 def _difference(difference: float, people: People, interval: Interval | Range | Gap, choices: Choices) -> str:
     """The difference and its interval in the same whole people."""
-    said = f"That is {numbers.whole(people.difference)} {limits.side(difference)}"
+    said = f"That is {_size(difference, people)} {limits.side(difference)}"
     if isinstance(interval, Gap):
         return f"{said if difference else 'There is no interval'}. {gap_text(interval)}"
     low, high, level = interval.low, interval.high, f"({numbers.level(choices.level)} interval)"
@@ -123,11 +127,20 @@ def _difference(difference: float, people: People, interval: Interval | Range | 
     if limits.beyond(interval, -1.0, 1.0):
         return f"{said}. {PAST_EVERYBODY.format(level=numbers.level(choices.level))}"
     if low * difference > 0 and high * difference > 0:
-        few, many = sorted((abs(low), abs(high)))
-        return f"{said}, and could be as few as {_size(few, people)} or as many as {_size(many, people)} {level}."
+        return f"{said}{_reach(interval, people, level)}."
     start = f"{said}, and could be" if difference else "The difference could be"
     both = f": {COMPATIBLE}" if low < 0 < high else ""
     return f"{start} anything from {_sided(low, people)} to {_sided(high, people)} {level}{both}."
+
+
+def _reach(interval: Interval | Range, people: People, level: str) -> str:
+    """Both limits on the estimate's side, where whole people can tell them apart."""
+    few, many = sorted(abs(x) for x in (interval.low, interval.high) if not isinstance(x, Gap))
+    if limits_apart(people.denominator, interval):
+        return f", and could be as few as {_size(few, people)} or as many as {_size(many, people)} {level}"
+    if _size(few, people) == _size(many, people):
+        return ""
+    return f", and could be from {_size(few, people)} to {_size(many, people)} {level}"
 
 
 def _size(limit: float, people: People) -> str:
