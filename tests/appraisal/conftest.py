@@ -7,7 +7,7 @@ from collections.abc import Callable
 import pytest
 
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.findings import OutcomeFindings
+from fourcount.appraisal.findings import Fact, OutcomeFindings
 from fourcount.record.outcome import EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import Choices
 
@@ -36,5 +36,18 @@ def appraised() -> Callable[..., OutcomeFindings]:
     def of(a: object, b: object, c: object, d: object, **rest: object) -> OutcomeFindings:
         choices = Choices(family=rest.pop("family", "score"), level=rest.pop("level", 0.95))  # type: ignore[arg-type]
         return appraise(_study(a, b, c, d, **rest), choices)
+
+    return of
+
+
+@pytest.fixture
+def facts(appraised: Callable[..., OutcomeFindings]) -> Callable[..., dict[str, list[dict[str, Fact]]]]:
+    """The facts of the cautions that hold, by key; several cautions of one key in a list."""
+
+    def of(*cells: object, **rest: object) -> dict[str, list[dict[str, Fact]]]:
+        found: dict[str, list[dict[str, Fact]]] = {}
+        for caution in appraised(*cells, **rest).cautions:
+            found.setdefault(caution.key, []).append(caution.facts)
+        return found
 
     return of

@@ -11,26 +11,13 @@ from fourcount.appraisal.cautions import CAUTIONS
 TABLE = (38, 374, 70, 339)
 
 
-@pytest.fixture
-def facts(appraised):
-    """The facts of the cautions that hold, by key; several cautions of one key in a list."""
-
-    def of(*cells, **rest):
-        found = {}
-        for caution in appraised(*cells, **rest).cautions:
-            found.setdefault(caution.key, []).append(caution.facts)
-        return found
-
-    return of
-
-
 def test_the_keys_in_order():
     """What changes the reader's conclusion comes first."""
     assert list(dict.fromkeys(rule.key for rule in CAUTIONS)) == [
         "read-as", "percent-disagrees", "index-looks-like-control",
         "odds-ratio-differs", "effect-kept-constant", "baseline-far", "baseline-uncertain", "rests-on-baseline",
-        "controls-over-time", "observational", "converted-limits", "zero-cells", "half-added", "through-no-effect",
-        "family-parts", "rare-harm", "leans",
+        "totals-are-sampled", "controls-over-time", "observational", "converted-limits", "zero-cells", "half-added",
+        "through-no-effect", "family-parts", "rare-harm", "leans",
     ]  # fmt: skip
 
 
@@ -84,70 +71,6 @@ def test_odds_ratio_differs_not_where_both_are_alike_or_missing(facts, cells):
 def test_odds_ratio_differs_not_in_a_case_control_study(facts):
     """A case-control study has no risk ratio to differ from."""
     assert "odds-ratio-differs" not in facts(80, 20, 50, 50, design="case-control")
-
-
-@pytest.mark.parametrize("design", ["trial", "cohort", "survey"])
-def test_effect_kept_constant(facts, design):
-    """A typed starting risk takes the relative effect elsewhere; the facts tell which and from where."""
-    (found,) = facts(*TABLE, design=design, baseline="12%")["effect-kept-constant"]
-    assert (found["effect"], found["baseline"]) == ("risk_ratio", 0.12)
-    assert math.isclose((38 / 412) / (70 / 409), found["value"])
-    assert math.isclose(70 / 409, found["study"])
-
-
-@pytest.mark.parametrize("rest", [{}, {"design": "case-control", "baseline": "12%"}, {"baseline": "x"}])
-def test_effect_kept_constant_not_without_another_risk(facts, rest):
-    """The table's own risk, a study without risks, and an unreadable risk carry nothing elsewhere."""
-    assert "effect-kept-constant" not in facts(*TABLE, **rest)
-
-
-@pytest.mark.parametrize(
-    ("baseline", "far"), [("5%", False), ("4.9%", True), ("20%", False), ("20.1%", True), ("10%", False)]
-)
-def test_baseline_far_beyond_half_or_twice(facts, baseline, far):
-    """Half and twice the study's 10% are still near."""
-    assert far == ("baseline-far" in facts(8, 92, 10, 90, baseline=baseline))
-
-
-def test_baseline_far_tells_both_risks(facts):
-    """The facts are the typed risk and the study's."""
-    assert facts(8, 92, 10, 90, baseline="50%")["baseline-far"] == [{"baseline": 0.5, "study": 0.1}]
-
-
-def test_baseline_far_not_in_a_case_control_study(facts):
-    """A case-control study has no risk to be far from."""
-    assert "baseline-far" not in facts(8, 92, 10, 90, baseline="90%", design="case-control")
-
-
-@pytest.mark.parametrize("design", ["trial", "case-control"])
-def test_baseline_uncertain_with_a_bare_risk(facts, design):
-    """A bare value brings no uncertainty of its own, in any design."""
-    assert facts(*TABLE, baseline="12%", design=design)["baseline-uncertain"] == [{"baseline": 0.12}]
-
-
-def test_baseline_uncertain_not_for_the_tables_own_risk(facts):
-    """The table's direct intervals leave nothing out."""
-    assert "baseline-uncertain" not in facts(*TABLE)
-
-
-def test_baseline_uncertain_not_without_a_range(facts):
-    """Where no range is given nothing is said of it."""
-    assert "baseline-uncertain" not in facts(5, 0, 8, 0, baseline="12%", family="textbook")
-
-
-def test_a_case_control_study_with_a_starting_risk_rests_on_it(facts):
-    """Every absolute figure rests on the typed risk, and the controls' sampling decides what the ratio is."""
-    found = facts(*TABLE, design="case-control", baseline="12%")
-    assert found["rests-on-baseline"] == [{"baseline": 0.12}]
-    assert found["controls-over-time"] == [{}]
-
-
-@pytest.mark.parametrize("rest", [{"design": "case-control"}, {"design": "cohort", "baseline": "12%"}])
-def test_rests_on_baseline_not_otherwise(facts, rest):
-    """Without a typed risk nothing is carried; a cohort has risks of its own."""
-    found = facts(*TABLE, **rest)
-    assert "rests-on-baseline" not in found
-    assert "controls-over-time" not in found
 
 
 @pytest.mark.parametrize("design", ["cohort", "survey", "case-control"])

@@ -153,6 +153,14 @@ def test_a_caution_says_the_numbers_it_is_about():
     assert text == "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%."
 
 
+def test_a_case_control_study_rests_on_two_assumptions():
+    """The starting risk from elsewhere, and the odds ratio's being the same there."""
+    assert cautions.caution_text(Caution(key="rests-on-baseline", facts={"baseline": 0.12})) == (
+        "Every risk, difference and number needed here rests on the starting risk of 12%, which is not from this "
+        "study, and on the odds ratio being the same there."
+    )
+
+
 def test_what_was_added_is_said_as_it_was():
     """Walter adds to events and people, Gart to all four counts, and neither alters the estimate."""
     ratio, odds_ratio = (

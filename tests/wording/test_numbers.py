@@ -62,7 +62,9 @@ def test_a_percentage_has_one_decimal_and_more_where_its_smaller_side_is_small(f
         (0.0996, "0.0996"),
         (0.09996, "0.10"),
         (0.00012345, "0.000123"),
-        (1e-9, "<0.000001"),
+        (1e-9, "1.00×10⁻⁹"),
+        (4.2e-7, "4.20×10⁻⁷"),
+        (0.000001, "0.00000100"),
         (9.994, "9.99"),
         (9.995, "10.0"),
         (12.34, "12.3"),
@@ -97,6 +99,8 @@ def test_a_ratio_has_two_decimals_or_three_digits_and_is_1_only_where_it_is(x, t
         (0.0, 0.5, "0"),
         (math.inf, 0.5, "∞"),
         (0.0768, 0.0, "0.0768"),
+        (0.8, 4.2e-7, "0.80"),
+        (4.2e-7, 0.5, "4.20×10⁻⁷"),
     ],
 )
 def test_a_limit_takes_the_decimals_of_its_estimate(limit, estimate, text):

@@ -176,6 +176,17 @@ def test_the_p_value_names_its_test(outcome_of, findings_of):
     )
 
 
+@pytest.mark.parametrize(("design", "supposed"), [("trial", False), ("cohort", True), ("case-control", True)])
+def test_without_randomisation_a_number_needed_supposes_a_cause(outcome_of, findings_of, design, supposed):
+    """In the study's sentence and in the patient's."""
+    outcome = outcome_of(design=design, patient=Patient(starting_risk_text="12%"))
+    findings = findings_of(outcome)
+    told = [patient_words(outcome, findings, Choices(), 100).detail]
+    if design != "case-control":
+        told.append(measure_sentence("number_needed", outcome, findings, Choices()))
+    assert [supposed] * len(told) == ["if the difference is caused by it" in text for text in told]
+
+
 @pytest.mark.parametrize("family", FAMILIES)
 def test_an_outcome_that_all_share_has_no_p(outcome_of, findings_of, family):
     """Where nobody, or everybody, had the event there is nothing to test, and no p stands anywhere."""

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import math
 import re
 
 from fourcount.appraisal.case import NO_EFFECT, Case, excludes, straddles, value
@@ -52,9 +53,9 @@ def odds_ratio_differs(case: Case) -> Facts | None:
 
 
 def effect_kept_constant(case: Case) -> Facts | None:
-    """The study's relative effect is taken to hold at another starting risk."""
+    """The study's relative effect is taken to hold at another starting risk, one that is not printed as the same."""
     carried, study = case.carried, value(case.figures.get("risk_reference"))
-    if carried is None or study is None:
+    if carried is None or study is None or _printed_alike(carried.baseline, study):
         return None
     effect = value(carried.carried)
     if effect is None:
@@ -72,9 +73,9 @@ def baseline_far(case: Case) -> Facts | None:
 
 
 def baseline_uncertain(case: Case) -> Facts | None:
-    """A range at a bare starting risk holds nothing of that risk's own uncertainty."""
+    """A range, where there is one, at a bare starting risk holds nothing of that risk's own uncertainty."""
     carried = case.carried
-    if carried is None or isinstance(carried.with_.interval, Gap):
+    if carried is None or isinstance(carried.difference.estimate, Gap) or isinstance(carried.difference.interval, Gap):
         return None
     return {"baseline": carried.baseline}
 
@@ -85,6 +86,11 @@ def rests_on_baseline(case: Case) -> Facts | None:
     if carried is None or case.outcome.design != "case-control":
         return None
     return {"baseline": carried.baseline}
+
+
+def totals_are_sampled(case: Case) -> Facts | None:
+    """The investigator of a case-control study chose how many cases and controls there are."""
+    return {} if case.outcome.design == "case-control" else None
 
 
 def controls_over_time(case: Case) -> Facts | None:
@@ -171,6 +177,13 @@ def leans(case: Case) -> Facts | None:
     if difference < 0 and reaches_up:
         return {"side": "more"}
     return {"side": "fewer"} if difference > 0 and reaches_down else None
+
+
+def _printed_alike(one: float, study: float) -> bool:
+    """Whether a risk is the study's own as papers print it: to 0.1 point, and to two digits near 0% and 100%."""
+    size = min(study, 1 - study)
+    unit = 0.001 if size >= 0.01 else 10.0 ** (math.floor(math.log10(size)) - 1) if size > 0 else 0.0
+    return abs(one - study) <= unit / 2 + 1e-12
 
 
 def _survey(case: Case) -> Facts:

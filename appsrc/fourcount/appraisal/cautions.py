@@ -46,6 +46,11 @@ CAUTIONS: tuple[Rule, ...] = (
     Rule(key="baseline-uncertain", holds=rules.baseline_uncertain, source="Cochrane Handbook 5.1, 12.5.4.5"),
     Rule(key="rests-on-baseline", holds=rules.rests_on_baseline, source="Knol 2012; common practice"),
     Rule(
+        key="totals-are-sampled",
+        holds=rules.totals_are_sampled,
+        source="Cornfield 1951 (the odds ratio alone does not depend on the sampling), from memory; common practice",
+    ),
+    Rule(
         key="controls-over-time",
         holds=rules.controls_over_time,
         source="Knol, Vandenbroucke and others 2008 (what case-control studies estimate), from memory",

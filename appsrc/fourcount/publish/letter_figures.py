@@ -41,7 +41,8 @@ def withheld_lines(withheld: list[MeasureLine]) -> tuple[str, ...]:
 def _number_needed(line: MeasureLine, needed: AnyNumberNeeded, outcome: Outcome, level: str) -> str:
     kind = "NNT" if needed.kind == "neither" else needed.kind
     span = names.over_span(outcome)
-    return f"{kind} {line.estimate} ({level} {line.interval}){f' {span}' if span else f', {lines.NO_SPAN}'}"
+    over = f" {span}" if span else f", {lines.NO_SPAN}"
+    return f"{kind} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
 
 
 def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFindings, level: str) -> str:

@@ -3,8 +3,9 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, PatientFindings
+from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import limits, numbers
+from fourcount.wording import limits, names, numbers
 from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.headline import choose
 
@@ -74,13 +75,14 @@ def interval(patient: PatientFindings, choices: Choices, people: int) -> str:
     return f"{numbers.level(choices.level)} interval {interval}" if interval else ""
 
 
-def number_needed(needed: AnyNumberNeeded | Gap) -> str:
+def number_needed(needed: AnyNumberNeeded | Gap, outcome: Outcome) -> str:
     """The number needed of this column, told apart from that of the study."""
     if isinstance(needed, Gap):
         return gap_text(needed)
     kind = "NNT" if needed.kind == "neither" else needed.kind
     interval = limits.number_needed_interval(needed)
-    return f"{kind} at this starting risk {numbers.number_needed(needed.estimate)} ({interval})."
+    value = f"{numbers.number_needed(needed.estimate)} ({interval})"
+    return f"{kind} at this starting risk {value}{names.if_caused(outcome)}."
 
 
 def reason(gap: Gap, patient: PatientFindings) -> str:

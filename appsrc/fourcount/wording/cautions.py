@@ -49,8 +49,12 @@ TEXTS = {
         "The starting risk",
         (
             "Every risk, difference and number needed here rests on the starting risk of {baseline}, "
-            "which is not from this study."
+            "which is not from this study, and on the odds ratio being the same there."
         ),
+    ),
+    "totals-are-sampled": (
+        "Cases and controls",
+        "Totals are those of cases and controls, as many as the study took: no risk follows from them.",
     ),
     "controls-over-time": (
         "How controls were chosen",

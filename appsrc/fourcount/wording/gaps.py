@@ -31,7 +31,8 @@ GAP_TEXTS = {
     "no-starting-risk": "Type a starting risk: nobody is in the reference group to give one.",
     "baseline-unreadable": "The starting risk cannot be read; 12% or 12 in 100 would do.",
     "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
-    "undetermined-at-baseline": "An effect of 0 or infinity says nothing at a starting risk of 0% or 100%.",
+    "undetermined-at-baseline": "An infinite effect says nothing at a starting risk of 0%, nor an odds ratio of 0 "
+    "at one of 100%.",
     "bare-starting-risk": "The starting risk was typed without an interval of its own.",
     "formula-beyond-one": "The bare formula’s limit passes 100%, where no risk lies; the score intervals do not.",
     "formula-beyond-risks": "The bare formula’s limit parts the two risks farther than they can lie apart; "

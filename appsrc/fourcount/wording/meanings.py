@@ -51,7 +51,7 @@ def number_needed(outcome: Outcome, needed: AnyNumberNeeded, findings: OutcomeFi
     event = names.event_words(outcome)
     return (
         f"{needed.kind} {people} {interval}: for every {people} people {groups} {span}, {change} {event}, "
-        f"on average, from {_reference_risk(outcome, findings)}.{through} "
+        f"on average{names.if_caused(outcome)}, from {_reference_risk(outcome, findings)}.{through} "
         "It does not say who it is, nor that the others gain or lose nothing."
     )
 

@@ -124,6 +124,11 @@ def _begins_with_preposition(span: str) -> bool:
     return span.split(" ", 1)[0].lower() in PREPOSITIONS
 
 
+def if_caused(outcome: Outcome) -> str:
+    """What a number needed supposes where the groups were not made alike by chance."""
+    return "" if outcome.design == "trial" else ", if the difference is caused by it"
+
+
 def risk_name(outcome: Outcome) -> str:
     """What a proportion of people is called: a survey finds a prevalence, not a risk."""
     return "prevalence" if outcome.design == "survey" else "risk"

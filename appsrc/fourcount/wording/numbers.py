@@ -23,7 +23,8 @@ SMALL_FIGURES = 2  # significant digits at least of a small risk or difference
 NEARLY_ALL_DECIMALS = 2  # of a percentage above 99
 MOST_DECIMALS = 12
 SMALLEST_PERCENT = 0.000001  # as a fraction: 0.0001%, below which only "less than that" is printed
-SMALLEST_RATIO = 0.000001
+SMALLEST_RATIO = 0.000001  # below it a ratio is written with a power of ten
+SUPERSCRIPT = str.maketrans("-0123456789", "⁻⁰¹²³⁴⁵⁶⁷⁸⁹")
 UNCERTAIN_PART = 1e-9  # taken off a number needed before it is rounded up: the float's own noise
 
 
@@ -104,7 +105,10 @@ def thousand(difference: float) -> str:
 
 
 def ratio(x: float) -> str:
-    """A ratio: two decimals from 0.10 to 9.99, otherwise three significant digits; 1.00 only where it is 1."""
+    """A ratio: two decimals from 0.10 to 9.99, otherwise three significant digits; 1.00 only where it is 1.
+
+    Below one millionth the three digits stand before a power of ten: 4.20×10⁻⁷.
+    """
     return ratio_limit(x, x)
 
 
@@ -115,14 +119,20 @@ def ratio_limit(x: float, estimate: float) -> str:
     if x <= 0:
         return f"{MINUS}{ratio_limit(-x, estimate)}" if x else "0"
     if x < SMALLEST_RATIO:
-        return f"<{fixed(SMALLEST_RATIO, 6)}"
+        return _tiny(x)
     if x == estimate:
         return fixed(x, _shown_ratio_decimals(x))
     own = _shown_ratio_decimals(x)
-    decimals = max(_shown_ratio_decimals(estimate), 0) if 0 < estimate < math.inf else own
+    decimals = max(_shown_ratio_decimals(estimate), 0) if SMALLEST_RATIO <= estimate < math.inf else own
     if _scaled(x, decimals) == 0:
         decimals = _significant_decimals(x, SMALL_FIGURES)
     return fixed(x, _apart_from_one(x, decimals))
+
+
+def _tiny(x: float) -> str:
+    """Three significant digits and their power of ten."""
+    digits, power = f"{x:.2e}".split("e")
+    return f"{digits}×10{str(int(power)).translate(SUPERSCRIPT)}"
 
 
 def p_value(p: float) -> str:

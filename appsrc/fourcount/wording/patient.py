@@ -153,7 +153,7 @@ def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
     """What stands under the summary: number needed, relative words, and what the interval leaves out."""
     if isinstance(patient.with_.estimate, Gap):
         return carried.reason(patient.with_.estimate, patient)
-    sentences = [carried.number_needed(patient.number_needed), _relative(named, patient.risk_ratio)]
+    sentences = [carried.number_needed(patient.number_needed, named), _relative(named, patient.risk_ratio)]
     sentences += carried.reasons(patient)
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
         sentences.append(f"The interval leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
