@@ -6,11 +6,9 @@ import os
 import signal
 from pathlib import Path
 
-from PySide6.QtGui import QIcon
 from PySide6.QtWidgets import QApplication
 
 from fourcount import __version__
-from fourcount.assets_folder import assets_folder
 from fourcount.face.errors import ErrorListener
 from fourcount.face.later import Later
 from fourcount.face.look import Look
@@ -33,7 +31,6 @@ def make_application(arguments: list[str]) -> QApplication:
     application.setApplicationVersion(__version__)
     application.setDesktopFileName("fourcount")
     application.setStyle("Fusion")
-    application.setWindowIcon(QIcon(str(assets_folder() / "fourcount.png")))
     return application
 
 

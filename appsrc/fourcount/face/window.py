@@ -7,7 +7,7 @@ from itertools import pairwise
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer, Signal
-from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QKeyEvent, QPaintEvent, QResizeEvent
+from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QIcon, QKeyEvent, QPaintEvent, QResizeEvent
 from PySide6.QtWidgets import QApplication, QMainWindow, QVBoxLayout, QWidget
 
 from fourcount.face import actions as commands_table
@@ -69,7 +69,12 @@ class MainWindow(QMainWindow):
         self._build()
         self._connect_all()
         self._show_state(session.record, None)
-        self._fields: list[TextField] = self.findChildren(TextField)
+        grid = self.printed.grid
+        self._fields: tuple[TextField, ...] = (
+            self.header.title, self.header.source, self.printed.name, self.printed.event_words, self.printed.span,
+            *grid.headings.values(), *grid.labels.values(), *grid.cells.values(), self.patient.baseline,
+            self.patient.source,
+        )  # fmt: skip
         self._set_tab_order()
         self.printed.grid.cells[CELLS[0]].setFocus()
 
@@ -235,6 +240,9 @@ class MainWindow(QMainWindow):
     # Slots
 
     def _on_first_painted(self) -> None:
+        from fourcount.assets_folder import assets_folder
+
+        self.setWindowIcon(QIcon(str(assets_folder() / "fourcount.png")))
         gc.enable()
         self.session.wake()
         self._later.load()
