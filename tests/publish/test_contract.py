@@ -255,3 +255,27 @@ def test_a_table_that_is_not_whole_is_withheld() -> None:
     assert [key for key in published if key != "patient"] == KEYS
     for part in (*published["measures"].values(), published["methods"], published["tests"], published["patient"]):
         assert withheld(part)
+
+
+def test_a_withheld_limit_stands_in_its_place_alone() -> None:
+    """80% v 40% carried to 45%: the upper limit would pass 100%, and all else is given, the number needed too."""
+    patient = answer(80, 20, 40, 60, baseline="45%")["patient"]
+    assert isinstance(patient, dict)
+    reason = (
+        "The upper limit of the risk would pass 100%, so the interval is open there; carrying the odds ratio avoids it."
+    )
+    gone = {"withheld": "beyond-one", "text": reason}
+    assert (patient["risk_with"]["high"], patient["difference"]["high"]) == (gone, gone)
+    needed = patient["number_needed"]
+    assert (needed["kind"], needed["low"], needed["through_infinity"]) == ("NNTH", gone, False)
+    assert needed["estimate"] == pytest.approx(1 / 0.45)
+    assert needed["high"]["value"] == pytest.approx(1 / (patient["risk_with"]["low"] - 0.45))
+
+
+def test_at_the_own_risk_the_conversion_is_the_risk_ratio() -> None:
+    """The same figure with the same method: nothing is converted."""
+    published = answer(38, 374, 70, 339)
+    conversion, measures = published["conversion"], published["measures"]
+    assert isinstance(conversion, dict)
+    assert isinstance(measures, dict)
+    assert (conversion["baseline_from"], conversion["risk_ratio"]) == ("reference", measures["risk_ratio"])

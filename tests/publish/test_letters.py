@@ -339,3 +339,11 @@ def test_one_line_is_one_line(text: str) -> None:
 def test_words_joined_by_invisible_marks_stay_joined() -> None:
     """Letters of scripts that need a joiner keep it."""
     assert one_line("\u0645\u06cc\u200c\u0627\u0641\u062a\u062f") == "\u0645\u06cc\u200c\u0627\u0641\u062a\u062f"
+
+
+def test_a_sheet_leaves_blank_what_is_withheld_and_repeats_no_row() -> None:
+    """One limit of the number needed; the odds ratio at the study's own risk, where it is the risk ratio."""
+    found = {row[0]: row for row in table_of(outcome_of((80, 20, 40, 60), risk="45%"))}
+    needed = found["For one patient, 45%: NNTH"]
+    assert (needed[2], bool(NUMBER.fullmatch(needed[3])), "would pass 100%" in needed[4]) == ("", True, True)
+    assert not any("as a risk ratio" in row[0] for row in table_of(outcome_of((80, 20, 40, 60))))

@@ -26,7 +26,7 @@ from fourcount.record.entry.digits import plain
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording.cautions import caution_text
-from fourcount.wording.gaps import gap_text
+from fourcount.wording.gaps import gap_text, limit_text
 
 Json = dict[str, object]
 
@@ -95,7 +95,12 @@ def _limits(interval: Interval | Range | Gap) -> tuple[object, object, str | Non
     """Both limits and the correction in use; an interval that is withheld is withheld at both ends."""
     if isinstance(interval, Gap):
         return _withheld(interval), _withheld(interval), None
-    return _value(interval.low), _value(interval.high), interval.adjusted
+    return _limit(interval.low), _limit(interval.high), interval.adjusted
+
+
+def _limit(limit: float | Gap) -> object:
+    """One limit, or why it alone is not given."""
+    return _withheld_limit(limit) if isinstance(limit, Gap) else _value(limit)
 
 
 def _pair(interval: Interval | Gap) -> object:
@@ -114,7 +119,7 @@ def _number_needed(needed: AnyNumberNeeded) -> Json:
 
 def _number_needed_limit(limit: NumberNeededLimit | Gap) -> Json:
     if isinstance(limit, Gap):
-        return _withheld(limit)
+        return _withheld_limit(limit)
     return {"value": _value(limit.value), "kind": limit.kind}
 
 
@@ -149,6 +154,10 @@ def _value(number: float | Gap) -> object:
     if isinstance(number, Gap):
         return _withheld(number)
     return {inf: "inf", -inf: "-inf"}.get(number, number)
+
+
+def _withheld_limit(gap: Gap) -> Json:
+    return {"withheld": gap.key, "text": limit_text(gap)}
 
 
 def _withheld(gap: Gap) -> Json:

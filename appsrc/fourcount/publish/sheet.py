@@ -118,7 +118,7 @@ def _figure(name: str, figure: Figure) -> Row:
 def _number_needed(name: str, needed: AnyNumberNeeded) -> Row:
     through = THROUGH_INFINITY if needed.through_infinity else ""
     low, high = _needed_limit(needed.low, needed), _needed_limit(needed.high, needed)
-    reasons = (gap_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap))
+    reasons = (limit_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap))
     return (name, _number(needed.estimate), low, high, "; ".join(part for part in (through, *reasons) if part))
 
 
@@ -139,7 +139,8 @@ def _p(findings: OutcomeFindings) -> Row:
 
 
 def _converted(conversion: Conversion | Gap) -> tuple[Row, ...]:
-    if isinstance(conversion, Gap):
+    """Only at a starting risk from elsewhere: at the study's own it is the risk ratio, which has a row."""
+    if isinstance(conversion, Gap) or conversion.baseline_from == "reference":
         return ()
     baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
     return (_figure(CONVERTED.format(baseline=baseline), conversion.risk_ratio),)
