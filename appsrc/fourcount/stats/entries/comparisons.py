@@ -35,7 +35,7 @@ DIFFERENCE_METHODS = (
         measure="risk_difference",
         interval=difference.agresti_caffo,
         title="Agresti–Caffo",
-        formula="Wald's interval with 1 added to each of a, b, c, d",
+        formula="Wald’s interval with 1 added to each of a, b, c, d",
         source="Agresti and Caffo 2000, Am Stat 54:280",
         note="Can pass −100 or 100 points and is given as it is. It need not hold the observed difference.",
     ),
@@ -77,7 +77,7 @@ RATIO_METHODS = (
         ),
         source="Miettinen and Nurminen 1985, Stat Med 4:213",
         note=(
-            "Koopman's with the factor N/(N−1), so that it agrees with the (N−1) chi-square test. Asymptotic. "
+            "Koopman’s with the factor N/(N−1), so that it agrees with the (N−1) chi-square test. Asymptotic. "
             "The lower limit is 0 with no index event, the upper infinite with no reference event."
         ),
     ),
@@ -89,7 +89,7 @@ RATIO_METHODS = (
         formula="R exp(∓ z √(1/a − 1/n1 + 1/c − 1/n2))",
         source="Katz, Baptista, Azen and Pike 1978, Biometrics 34:469; at 0 events Walter 1975",
         note=(
-            "With 0 events in a group it does not exist: Walter's takes its place, which adds 1/2 to the events and to "
+            "With 0 events in a group it does not exist: Walter’s takes its place, which adds 1/2 to the events and to "
             "the people of each group. Where everybody had the event its width would be zero, so none is given."
         ),
     ),

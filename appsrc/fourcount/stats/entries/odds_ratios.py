@@ -33,7 +33,7 @@ ODDS_RATIO_METHODS = (
         title="Baptista–Pike mid-P",
         formula=(
             "The least and the greatest odds ratio at which the sum of the probabilities, given the margins, of all "
-            "tables no likelier than this one, less half of this one's own, is above alpha"
+            "tables no likelier than this one, less half of this one’s own, is above alpha"
         ),
         source="Baptista and Pike 1977, Appl Stat 26:214; Fagerland and others 2015, Stat Methods Med Res 24:224",
         note="Inverts the two-sided test. Where the kept odds ratios leave a hole, the span round it is given.",
@@ -44,7 +44,7 @@ ODDS_RATIO_METHODS = (
         interval=_conditional_exact,
         title="Conditional exact (Cornfield, Fisher)",
         formula="Lower: P(A ≥ a | margins) = alpha/2; upper: P(A ≤ a | margins) = alpha/2; A noncentral hypergeometric",
-        source="Cornfield 1956; Fisher 1935",
+        source="Cornfield 1956, Proc Third Berkeley Symp 4:135; Fisher 1935, J R Stat Soc 98:39 (from memory)",
         note="Covers the true odds ratio at least as often as its level says, and usually more often, so it is wide.",
     ),
     Method(
@@ -57,7 +57,7 @@ ODDS_RATIO_METHODS = (
             "upper: P(A < a | margins) + P(A = a | margins)/2 = alpha/2"
         ),
         source="Fagerland, Lydersen and Laake 2015, Stat Methods Med Res 24:224",
-        note="Half of the observed table's own probability in each tail: narrower than the exact interval.",
+        note="Half of the observed table’s own probability in each tail: narrower than the exact interval.",
     ),
     Method(
         key="miettinen-nurminen",
@@ -70,7 +70,7 @@ ODDS_RATIO_METHODS = (
         ),
         source="Miettinen and Nurminen 1985, Stat Med 4:213",
         note=(
-            "Cornfield's without continuity correction, with the factor N/(N−1), so that it agrees with the (N−1) "
+            "Cornfield’s without continuity correction, with the factor N/(N−1), so that it agrees with the (N−1) "
             "chi-square test. Asymptotic. The lower limit is 0 where a or d is 0, the upper infinite where b or c is 0."
         ),
     ),
@@ -80,15 +80,15 @@ ODDS_RATIO_METHODS = (
         interval=odds.woolf,
         title="Woolf logit",
         formula="(ad/bc) exp(∓ z √(1/a + 1/b + 1/c + 1/d))",
-        source="Woolf 1955; at a count of 0 Gart 1966",
-        note="With a count of 0 it does not exist: Gart's takes its place, which adds 1/2 to all four counts.",
+        source="Woolf 1955, Ann Hum Genet 19:251 (volume and page from memory); at a count of 0 Gart 1966",
+        note="With a count of 0 it does not exist: Gart’s takes its place, which adds 1/2 to all four counts.",
     ),
     Method(
         key="gart",
         measure="odds_ratio",
         interval=odds.gart,
         title="Gart adjusted logit",
-        formula="Woolf's interval with 1/2 added to each of a, b, c, d, centre included",
+        formula="Woolf’s interval with 1/2 added to each of a, b, c, d, centre included",
         source="Gart 1966",
         note="It is centred on the adjusted odds ratio and need not hold the observed one.",
     ),

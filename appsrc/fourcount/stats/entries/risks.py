@@ -25,7 +25,7 @@ RISK_METHODS = (
             "upper: (2x + z² + 1 + z √(z² + 2 − 1/n + 4p(n(1−p) − 1))) / (2(n + z²))"
         ),
         source="Newcombe 1998, Stat Med 17:857, method 4",
-        note="The lower limit is 0 at no events, the upper 100% where everybody had the event. Wider than Wilson's.",
+        note="The lower limit is 0 at no events, the upper 100% where everybody had the event. Wider than Wilson’s.",
     ),
     Method(
         key="clopper-pearson",
@@ -45,7 +45,7 @@ RISK_METHODS = (
             "Lower L: P(X > x) + P(X = x)/2 = alpha/2 at risk L; upper U: P(X < x) + P(X = x)/2 = alpha/2 at risk U"
         ),
         source="Newcombe 1998, Stat Med 17:857",
-        note="Half of the observed count's own probability in each tail: narrower than Clopper–Pearson.",
+        note="Half of the observed count’s own probability in each tail: narrower than Clopper–Pearson.",
     ),
     Method(
         key="wald",
