@@ -13,7 +13,7 @@ from fourcount.picture.plan import plan
 from fourcount.record.outcome import DESIGNS, Patient
 from fourcount.record.paper import FAMILIES, Choices
 from fourcount.wording.cautions import caution_text, caution_title
-from fourcount.wording.gaps import mark_text
+from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.lines import measure_lines
 from fourcount.wording.meanings import odds_ratio_claim
 from fourcount.wording.patient import patient_words
@@ -174,6 +174,14 @@ def test_the_p_value_names_its_test(outcome_of, findings_of):
         "p = 0.65 by the (N−1) chi-square test of no association, two-sided. "
         "It does not say how large the effect is; the intervals do."
     )
+
+
+def test_a_number_needed_without_one_limit_says_why(outcome_of, findings_of):
+    """Wald's difference of 9/10 v 1/10 passes 100 in 100, where no number needed is."""
+    outcome, choices = outcome_of((9, 1, 1, 9)), Choices(family="textbook")
+    sentence = measure_sentence("number_needed", outcome, findings_of(outcome, choices), choices)
+    assert sentence.startswith("NNTH 2 (95% interval up to 2; the lower limit is withheld): ")
+    assert sentence.endswith(gap_text(Gap("formula-beyond-risks")))
 
 
 @pytest.mark.parametrize(("design", "supposed"), [("trial", False), ("cohort", True), ("case-control", True)])

@@ -42,7 +42,8 @@ def _number_needed(line: MeasureLine, needed: AnyNumberNeeded, outcome: Outcome,
     kind = "NNT" if needed.kind == "neither" else needed.kind
     span = names.over_span(outcome)
     over = f" {span}" if span else f", {lines.NO_SPAN}"
-    return f"{kind} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
+    said = f"{kind} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
+    return ". ".join(part for part in (said, limits.withheld_needed(needed)) if part)
 
 
 def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFindings, level: str) -> str:

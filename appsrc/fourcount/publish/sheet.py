@@ -21,7 +21,7 @@ from fourcount.publish.made_with import made_with
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
-from fourcount.wording import labels, lines, names, numbers
+from fourcount.wording import labels, limits, lines, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.gaps import gap_text, limit_text
@@ -118,8 +118,8 @@ def _figure(name: str, figure: Figure) -> Row:
 def _number_needed(name: str, needed: AnyNumberNeeded) -> Row:
     through = THROUGH_INFINITY if needed.through_infinity else ""
     low, high = _needed_limit(needed.low, needed), _needed_limit(needed.high, needed)
-    reasons = (limit_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap))
-    return (name, _number(needed.estimate), low, high, "; ".join(part for part in (through, *reasons) if part))
+    why = "; ".join(part for part in (through, limits.withheld_needed(needed)) if part)
+    return (name, _number(needed.estimate), low, high, why)
 
 
 def _needed_limit(limit: NumberNeededLimit | Gap, needed: AnyNumberNeeded) -> str:

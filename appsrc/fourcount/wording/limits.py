@@ -6,6 +6,7 @@ from collections.abc import Callable
 
 from fourcount.appraisal.findings import AnyNumberNeeded, Gap, Interval, NumberNeededLimit, Range
 from fourcount.wording import numbers
+from fourcount.wording.gaps import limit_text
 
 AnyInterval = Interval | Range | Gap
 
@@ -115,6 +116,11 @@ def _through_infinity(needed: AnyNumberNeeded) -> str:
     first = f"{near}, {LIMIT_WITHHELD}," if isinstance(low, Gap) else _needed(low)
     last = f"{far}, {LIMIT_WITHHELD}" if isinstance(high, Gap) else _needed(high)
     return numbers.TO.join((first, numbers.INFINITY, last))
+
+
+def withheld_needed(needed: AnyNumberNeeded) -> str:
+    """Why one limit of a number needed is not given, or ""."""
+    return " ".join(limit_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap))
 
 
 def relative(ratio: float, link: str = " ") -> str:

@@ -10,7 +10,7 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.number_needed import whole_number_needed
 from fourcount.wording import limits, names, numbers
-from fourcount.wording.gaps import gap_text, limit_text
+from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
 
 Kind = Literal["difference", "risk", "ratio", ""]
@@ -146,7 +146,7 @@ def _number_needed_line(needed: AnyNumberNeeded, outcome: Outcome, counts: Count
         detail=names.over_span(outcome) or NO_SPAN,
         estimate=whole_needed(counts),
         interval=limits.number_needed_interval(needed),
-        note=" ".join(limit_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap)),
+        note=limits.withheld_needed(needed),
     )
 
 

@@ -48,11 +48,11 @@ def number_needed(outcome: Outcome, needed: AnyNumberNeeded, findings: OutcomeFi
     change = _one(_estimate(figure) if isinstance(figure, Figure) else 0.0)
     people = lines.whole_needed(findings.counts)
     through = f" The interval runs through infinity: {COMPATIBLE_KINDS}." if needed.through_infinity else ""
-    event = names.event_words(outcome)
+    event, withheld = names.event_words(outcome), limits.withheld_needed(needed)
     return (
         f"{needed.kind} {people} {interval}: for every {people} people {groups} {span}, {change} {event}, "
         f"on average{names.if_caused(outcome)}, from {_reference_risk(outcome, findings)}.{through} "
-        "It does not say who it is, nor that the others gain or lose nothing."
+        f"It does not say who it is, nor that the others gain or lose nothing.{f' {withheld}' if withheld else ''}"
     )
 
 
