@@ -11,7 +11,7 @@ from hypothesis import strategies as st
 from fourcount.record.outcome import EventsAndOthers
 from fourcount.record.paper import Choices
 from fourcount.wording import numbers
-from fourcount.wording.headline import DO_NOT_ADD_UP
+from fourcount.wording.headline import DO_NOT_ADD_UP, choose
 from fourcount.wording.patient import patient_words
 from fourcount.wording.sentence import COMPATIBLE, headline
 
@@ -174,3 +174,10 @@ def test_a_clause_that_whole_people_cannot_tell_is_left_out(outcome_of, findings
     """Limits of 10,000 people that fall together, or onto no effect, are not said as if they did."""
     outcome = outcome_of(counts)
     assert headline(outcome, findings_of(outcome), Choices()).endswith(ending)
+
+
+def test_two_small_risks_are_told_apart():
+    """10 and 5.4 in 100,000 are not both "1 in 10,000"; risks of many people may be told alike."""
+    small = choose(0.000054, 0.0001, 0.000046)
+    assert (small.denominator, small.reference, small.index, small.difference) == (100_000, 5, 10, 5)
+    assert choose(0.5, 0.5000001, 0.0000001).denominator == 10_000

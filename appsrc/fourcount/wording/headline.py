@@ -1,9 +1,9 @@
 """How many people of a round number the headline speaks of, and what its numbers are.
 
-Whole people of 100, unless that would make different risks look alike, somebody nobody, nearly all
-all, or numbers that do not add up; then of 1,000 or 10,000. More than 10,000 people, whom nobody can picture,
-are spoken of only where somebody would be nobody, or nearly all all, among fewer. The difference is rounded from
-the difference itself, never taken from the rounded parts.
+Whole people of 100, unless that would make different risks look alike, somebody nobody, nearly all all, or numbers
+that do not add up; then of 1,000 or 10,000. More than 10,000 people, whom nobody can picture, are spoken of only
+where among fewer somebody would be nobody, nearly all all, or two risks of a few the same. The difference is rounded
+from the difference itself, never taken from the rounded parts.
 """
 
 from __future__ import annotations
@@ -16,6 +16,7 @@ from fourcount.wording import numbers
 DENOMINATORS = tuple(10**power for power in range(2, 10))
 ONE_PERSON = 1 - 1e-9  # a difference of less than one whole person is not said in whole people
 LARGEST_PICTURED = 10_000  # common practice: beyond it whole people say no more than a percentage does
+A_FEW = 10
 DO_NOT_ADD_UP = "Whole numbers are rounded, so they need not add up."
 
 
@@ -43,7 +44,11 @@ def choose(reference: float, index: float, difference: float, interval: Interval
     pictured = [d for d in DENOMINATORS if d <= LARGEST_PICTURED]
     fitting = [d for d in pictured if _true_at(d, reference, index, difference)]
     fine = [d for d in fitting if limits_apart(d, interval)]
-    whole = [d for d in DENOMINATORS if d >= LARGEST_PICTURED and _nobody_hidden(d, reference, index)]
+    whole = [
+        d
+        for d in DENOMINATORS
+        if d >= LARGEST_PICTURED and _nobody_hidden(d, reference, index) and _few_apart(d, reference, index)
+    ]
     denominator = (*fine, *fitting, *whole, DENOMINATORS[-1])[0]
     return People(
         denominator=denominator,
@@ -68,6 +73,12 @@ def _nobody_hidden(denominator: int, *risks: float) -> bool:
     """Whether somebody stays somebody, and nearly all stays under all."""
     rounded = [(numbers.people(risk, denominator), risk) for risk in risks]
     return all((n > 0) == (risk > 0) and (n < denominator) == (risk < 1) for n, risk in rounded)
+
+
+def _few_apart(denominator: int, one: float, other: float) -> bool:
+    """Whether two different risks of only a few people are not told by one and the same number."""
+    first, second = numbers.people(one, denominator), numbers.people(other, denominator)
+    return one == other or first != second or max(first, second) >= A_FEW
 
 
 def limits_apart(denominator: int, interval: Interval | Range | Gap | None) -> bool:
