@@ -96,11 +96,11 @@ def test_counts_and_percentages_say_the_same(outcome_of, findings_of, denominato
 
 
 def test_what_cannot_be_drawn_is_still_said(outcome_of, findings_of):
-    """Text on no more people than one can picture; what is too small to count is said to be."""
+    """Text on the smallest number of people that tells the two risks apart."""
     words = words_of(outcome_of(patient=at("0.01%")), findings_of, None)
     assert words.scale == "Too small to draw as people."
-    assert (words.without_count, words.with_count) == ("1 in 10,000", "1 in 10,000")
-    assert words.summary_bold == "under 1 fewer in 10,000 fell at least once"
+    assert (words.without_count, words.with_count) == ("10 in 100,000", "5 in 100,000")
+    assert words.summary_bold == "5 fewer in 100,000 fell at least once"
 
 
 def test_a_larger_picture_is_announced(outcome_of, findings_of):
