@@ -9,6 +9,10 @@ from fourcount.ink.palette import Palette
 from fourcount.picture.scales import Scale
 
 
+HEIGHT = 20.0
+"""The height of a strip at 100% text, in logical pixels."""
+
+
 def draw_strip(
     painter: QPainter,
     area: QRectF,
@@ -18,43 +22,50 @@ def draw_strip(
     low: float | None,
     high: float | None,
 ) -> None:
-    """Draw one strip along the middle of ``area``; a limit beyond the scale's end is drawn as an arrow."""
+    """Draw one strip along the middle of ``area``; a limit beyond the scale's end is drawn as an arrow.
+
+    Bar and dot grow with the height of ``area``, and so with the text.
+    """
+    unit = max(area.height() / HEIGHT, 1.0)
     middle = round(area.center().y()) + 0.5
     painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-    painter.setPen(QPen(QColor(palette.hairline), 1.5))
+    painter.setPen(QPen(QColor(palette.hairline), 1.5 * unit))
     painter.drawLine(QLineF(area.left(), middle, area.right(), middle))
     if scale.no_effect is not None:
         x = _x(area, scale.place(scale.no_effect))
-        painter.setPen(QPen(QColor(palette.outline), 1.5, Qt.PenStyle.DotLine))
+        painter.setPen(QPen(QColor(palette.outline), 1.5 * unit, Qt.PenStyle.DotLine))
         painter.drawLine(QLineF(x, area.top(), x, area.bottom()))
     if low is not None and high is not None:
-        _draw_interval(painter, area, middle, scale.place(low), scale.place(high), palette)
+        _draw_interval(painter, area, middle, scale.place(low), scale.place(high), palette.accent, unit)
     if estimate is not None and 0 <= scale.place(estimate) <= 1:
         painter.setPen(Qt.PenStyle.NoPen)
         painter.setBrush(QColor(palette.page))
         centre = QPointF(_x(area, scale.place(estimate)), middle)
-        painter.drawEllipse(centre, 6.0, 6.0)
+        painter.drawEllipse(centre, 6 * unit, 6 * unit)
         painter.setBrush(QColor(palette.accent))
-        painter.drawEllipse(centre, 4.0, 4.0)
+        painter.drawEllipse(centre, 4 * unit, 4 * unit)
 
 
 def _x(area: QRectF, place: float) -> float:
     return area.left() + area.width() * place
 
 
-def _draw_interval(painter: QPainter, area: QRectF, middle: float, low: float, high: float, palette: Palette) -> None:
+def _draw_interval(
+    painter: QPainter, area: QRectF, middle: float, low: float, high: float, accent: str, unit: float
+) -> None:
     left, right = _x(area, min(max(low, 0.0), 1.0)), _x(area, min(max(high, 0.0), 1.0))
-    colour = QColor(palette.accent)
-    painter.setPen(QPen(colour, 3, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))
+    colour = QColor(accent)
+    painter.setPen(QPen(colour, 3 * unit, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))
     painter.drawLine(QLineF(left, middle, right, middle))
     painter.setPen(Qt.PenStyle.NoPen)
     painter.setBrush(colour)
     if low < 0:
-        _arrow(painter, left, middle, -1)
+        _arrow(painter, left, middle, -unit)
     if high > 1:
-        _arrow(painter, right, middle, 1)
+        _arrow(painter, right, middle, unit)
 
 
-def _arrow(painter: QPainter, x: float, y: float, direction: int) -> None:
-    tip, back = x + 3 * direction, x - 5 * direction
-    painter.drawPolygon(QPolygonF([QPointF(tip, y), QPointF(back, y - 4.5), QPointF(back, y + 4.5)]))
+def _arrow(painter: QPainter, x: float, y: float, size: float) -> None:
+    """An arrow head at x; it points to the left where ``size`` is negative."""
+    tip, back, half = x + 3 * size, x - 5 * size, 4.5 * abs(size)
+    painter.drawPolygon(QPolygonF([QPointF(tip, y), QPointF(back, y - half), QPointF(back, y + half)]))
