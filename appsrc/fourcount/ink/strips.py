@@ -8,7 +8,6 @@ from PySide6.QtGui import QColor, QPainter, QPen, QPolygonF
 from fourcount.ink.palette import Palette
 from fourcount.picture.scales import Scale
 
-
 HEIGHT = 20.0
 """The height of a strip at 100% text, in logical pixels."""
 
