@@ -17,11 +17,12 @@ from fourcount.appraisal.findings import Gap
 from fourcount.publish.listing import WIDTH, listing
 from fourcount.publish.plain_text import one_line
 from fourcount.publish.prose import prose
-from fourcount.publish.sheet import HEAD, Row, html, rows, tsv
+from fourcount.publish.sheet import Row, html, rows, tsv
 from fourcount.record.outcome import CELLS, DESIGNS, EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import FAMILIES, Choices, Record
 from fourcount.wording.cautions import STANDING, STANDING_FULL, caution_text
 from fourcount.wording.example import worked_example
+from fourcount.wording.exports import SHEET_HEAD
 from fourcount.wording.gaps import gap_text
 
 RECORD = worked_example()
@@ -249,7 +250,7 @@ def test_a_limit_beyond_everybody_is_told_from_an_estimate_beyond_everybody() ->
 def test_a_sheet_holds_unrounded_numbers() -> None:
     """The sheet's figures are the findings', to the last digit."""
     found = {row[0]: row for row in table_of(OUTCOME)}
-    assert table_of(OUTCOME)[0] == HEAD
+    assert table_of(OUTCOME)[0] == SHEET_HEAD
     assert float(found["Difference"][1]) == float(Fraction(38, 412) - Fraction(70, 409))
     assert found["Odds ratio"][4] == "miettinen-nurminen"
     assert float(found["p, two-sided"][1]) == pytest.approx(0.000829, abs=5e-7)
@@ -259,7 +260,7 @@ def test_a_sheet_says_what_it_is_about_and_who_made_it() -> None:
     """Name, title and source under the head where they were typed; version, date and intervals at the end."""
     findings = appraise(OUTCOME, RECORD.choices)
     first, *table = rows(RECORD, OUTCOME, findings, version="9.9", today=date(2030, 5, 1))
-    assert first == HEAD
+    assert first == SHEET_HEAD
     assert [row[0] for row in table[:3]] == [OUTCOME.name_text, RECORD.title_text, RECORD.source_text]
     assert table[-1][0] == "Calculated with Fourcount 9.9 on 2030-05-01; score intervals at 95%."
     assert table_of(outcome_of((1, 2, 3, 4)))[1][0] == "A paper"
@@ -292,7 +293,7 @@ def test_every_table_can_be_exported(counts: tuple[int, ...], design: str, famil
     assert letter(outcome, choices).endswith(".\n")
     assert all(len(line) <= WIDTH for line in on_screen(outcome, choices).splitlines())
     for row in table_of(outcome, choices)[1:]:
-        assert len(row) == len(HEAD)
+        assert len(row) == len(SHEET_HEAD)
         for cell in row[1:4]:
             assert cell == "" or NUMBER.fullmatch(cell.removeprefix("NNTB ").removeprefix("NNTH "))
 
@@ -307,7 +308,7 @@ def test_what_was_typed_cannot_break_out(label: str) -> None:
     assert len(lines) == len(table_of(outcome))
     for line in lines:
         cells = line.split("\t")
-        assert len(cells) == len(HEAD)
+        assert len(cells) == len(SHEET_HEAD)
         for cell in cells:
             assert NUMBER.fullmatch(cell) or not cell.startswith(("=", "+", "-", "@", "\uff1d", '"'))
     for text in (sheet, letter(outcome), on_screen(outcome)):

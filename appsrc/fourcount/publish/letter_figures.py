@@ -5,7 +5,7 @@ from __future__ import annotations
 from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import limits, lines, names, numbers
+from fourcount.wording import exports, limits, lines, names, numbers
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
 from fourcount.wording.lines import MeasureLine, measure_lines
@@ -13,11 +13,13 @@ from fourcount.wording.lines import MeasureLine, measure_lines
 ORDER = ("risk_reference", "risk_index", "risk_difference", "number_needed", "risk_ratio", "odds_ratio")
 """Absolute before relative."""
 
+RISKS: dict[str, names.Group] = {"risk_reference": "reference", "risk_index": "index"}
+
 
 def figure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[str, ...]:
     """The lines of a whole table: "Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409"."""
     shown = {line.key: line for line in measure_lines(outcome, findings, choices)}
-    level = f"{numbers.level(choices.level)} interval"
+    level = limits.interval_name(choices.level)
     given, withheld = [], []
     for key in ORDER:
         measure = findings.measures[key]
@@ -39,10 +41,9 @@ def withheld_lines(withheld: list[MeasureLine]) -> tuple[str, ...]:
 
 
 def _number_needed(line: MeasureLine, needed: AnyNumberNeeded, outcome: Outcome, level: str) -> str:
-    kind = "NNT" if needed.kind == "neither" else needed.kind
     span = names.over_span(outcome)
     over = f" {span}" if span else f", {lines.NO_SPAN}"
-    said = f"{kind} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
+    said = f"{limits.needed_kind(needed)} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
     return ". ".join(part for part in (said, limits.withheld_needed(needed)) if part)
 
 
@@ -51,7 +52,7 @@ def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFind
     if not isinstance(figure, Figure):
         raise TypeError(key)
     interval = "" if isinstance(figure.interval, Gap) else f" ({level} {line.interval})"
-    unit = " per 100" if key == "risk_difference" and not isinstance(figure.estimate, Gap) else ""
+    unit = exports.PER_100 if key == "risk_difference" and not isinstance(figure.estimate, Gap) else ""
     parts = (f"{_name(key, line, outcome)}: {line.estimate}{unit}{interval}", *_more(key, figure, outcome, findings))
     reasons = dict.fromkeys(gap_text(part) for part in (figure.estimate, figure.interval) if isinstance(part, Gap))
     return ". ".join((", ".join(part for part in parts if part), *reasons))
@@ -59,10 +60,10 @@ def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFind
 
 def _name(key: str, line: MeasureLine, outcome: Outcome) -> str:
     """A risk is named with its group as the sentences name it."""
+    if key not in RISKS:
+        return line.name
     risk = names.sentence_case(names.risk_name(outcome))
-    if key == "risk_reference":
-        return f"{risk} {names.in_group(outcome, 'reference')}"
-    return f"{risk} {names.in_group(outcome, 'index')}" if key == "risk_index" else line.name
+    return exports.GROUP_RISK.format(risk=risk, group=names.in_group(outcome, RISKS[key]))
 
 
 def _more(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings) -> tuple[str, ...]:
@@ -71,10 +72,11 @@ def _more(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings)
     if isinstance(counts, Gap):
         return ()
     more = [half_added(figure)]
-    if key == "risk_reference":
-        more.append(f"{numbers.whole(counts.reference_events)} of {numbers.whole(counts.reference_total)}")
-    if key == "risk_index":
-        more.append(f"{numbers.whole(counts.index_events)} of {numbers.whole(counts.index_total)}")
+    if key in RISKS:
+        events, people = counts.index_events, counts.index_total
+        if RISKS[key] == "reference":
+            events, people = counts.reference_events, counts.reference_total
+        more.append(exports.EVENTS_OF_PEOPLE.format(events=numbers.whole(events), people=numbers.whole(people)))
     if key == "risk_ratio" and not isinstance(figure.estimate, Gap):
         more.append(limits.relative(figure.estimate))
     if key == "odds_ratio":

@@ -10,7 +10,7 @@ from fourcount.publish.letter_figures import withheld_lines
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import labels, numbers
+from fourcount.wording import labels, limits
 from fourcount.wording.cautions import STANDING, caution_text
 from fourcount.wording.lines import MeasureLine, measure_lines
 from fourcount.wording.patient import patient_words
@@ -19,7 +19,6 @@ from fourcount.wording.sentence import headline, p_sentence
 WIDTH = 79
 INDENT = "  "
 LONGEST_NAME = 36
-INTERVAL_HEAD = "{level} interval"
 
 
 def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
@@ -42,7 +41,7 @@ def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
 
 def _figures(lines: list[MeasureLine], choices: Choices) -> str:
     """A row for every measure, with its notes below it; what is too long for the row has a line of its own."""
-    head = ("", "", INTERVAL_HEAD.format(level=numbers.level(choices.level)), "")
+    head = ("", "", limits.interval_name(choices.level), "")
     cells = ((line.name, line.estimate, line.interval, line.detail) for line in lines)
     rows = [head, *(tuple(map(one_line, row)) for row in cells)]
     name = max(len(row[0]) for row in rows if len(row[0]) <= LONGEST_NAME)

@@ -5,12 +5,10 @@ from __future__ import annotations
 from datetime import date
 
 from fourcount.record.paper import Choices
-from fourcount.wording import numbers
-
-MADE_WITH = "Calculated with Fourcount {version} on {date}; {family} intervals at {level}."
+from fourcount.wording import exports, numbers
 
 
 def made_with(choices: Choices, version: str, today: date) -> str:
     """``version`` and ``today`` are given by whoever asks: this room looks at no clock."""
     level = numbers.level(choices.level)
-    return MADE_WITH.format(version=version, date=today.isoformat(), family=choices.family, level=level)
+    return exports.MADE_WITH.format(version=version, date=today.isoformat(), family=choices.family, level=level)

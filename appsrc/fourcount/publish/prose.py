@@ -11,7 +11,7 @@ from fourcount.publish.made_with import made_with
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
-from fourcount.wording import labels, names, numbers
+from fourcount.wording import exports, labels, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.patient import picture_heading
@@ -50,8 +50,13 @@ def _counts(outcome: Outcome, findings: OutcomeFindings) -> str:
     )
     event, other = names.event_words(outcome), names.other_words(outcome)
     return " ".join(
-        f"{names.sentence_case(names.label(outcome, group))}: {numbers.whole(events)} {event}, "
-        f"{numbers.whole(others)} {other}."
+        exports.GROUP_COUNTS.format(
+            group=names.sentence_case(names.label(outcome, group)),
+            events=numbers.whole(events),
+            event=event,
+            others=numbers.whole(others),
+            other=other,
+        )
         for group, events, others in groups
     )
 

@@ -21,21 +21,13 @@ from fourcount.publish.made_with import made_with
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
-from fourcount.wording import labels, limits, lines, names, numbers
+from fourcount.wording import exports, labels, limits, lines, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.half_added import half_added
 
 Row = tuple[str, str, str, str, str]
-
-HEAD: Row = ("measure", "estimate", "low", "high", "method")
-INFINITY = "infinity"
-THROUGH_INFINITY = "the interval runs through infinity"
-UNROUNDED = "Risks and differences are fractions, index minus reference; all figures are unrounded. Level {level}."
-P_NAME = "p, two-sided"
-CONVERTED = "Odds ratio as a risk ratio at {baseline}"
-PATIENT = "{column}, {baseline}: {name}"
 
 # Behind any blanks, a spreadsheet takes these for the beginning of a formula, and a quotation mark for that of a field
 # that goes on over tabs and lines.
@@ -52,7 +44,7 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
     cautions = [caution_text(caution) for caution in findings.cautions]
     about = (outcome.name_text, record.title_text, record.source_text)
     table = (
-        HEAD,
+        exports.SHEET_HEAD,
         *(_text(text) for text in about if text.strip()),
         *_counts(outcome, findings.counts),
         *(_measure(line.name, findings.measures[line.key]) for line in lines.measure_lines(outcome, findings, choices)),
@@ -60,7 +52,7 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
         *_converted(findings.conversion),
         *_patient(outcome, findings.patient),
         *(_text(caution) for caution in cautions),
-        _text(UNROUNDED.format(level=numbers.level(choices.level))),
+        _text(exports.UNROUNDED.format(level=numbers.level(choices.level))),
         *(_text(sentence) for sentence in STANDING_FULL),
         _text(made_with(choices, version, today)),
     )
@@ -93,9 +85,10 @@ def _counts(outcome: Outcome, counts: Counts | Gap) -> tuple[Row, ...]:
     )
     table: list[Row] = []
     for group, events, total in groups:
-        people = f"People {names.in_group(outcome, group)}"
-        table.append((f"{people} who {names.event_words(outcome)}", str(events), "", "", ""))
-        table.append((f"{people}, all", str(total), "", "", ""))
+        where = names.in_group(outcome, group)
+        with_event = exports.PEOPLE_WITH_EVENT.format(group=where, event=names.event_words(outcome))
+        table.append((with_event, str(events), "", "", ""))
+        table.append((exports.ALL_PEOPLE.format(group=where), str(total), "", "", ""))
     return tuple(table)
 
 
@@ -116,7 +109,7 @@ def _figure(name: str, figure: Figure) -> Row:
 
 
 def _number_needed(name: str, needed: AnyNumberNeeded) -> Row:
-    through = THROUGH_INFINITY if needed.through_infinity else ""
+    through = exports.THROUGH_INFINITY if needed.through_infinity else ""
     low, high = _needed_limit(needed.low, needed), _needed_limit(needed.high, needed)
     why = "; ".join(part for part in (through, limits.withheld_needed(needed)) if part)
     return (name, _number(needed.estimate), low, high, why)
@@ -133,9 +126,9 @@ def _needed_limit(limit: NumberNeededLimit | Gap, needed: AnyNumberNeeded) -> st
 def _p(findings: OutcomeFindings) -> Row:
     test = findings.test
     if isinstance(test, Gap):
-        return (P_NAME, "", "", "", gap_text(test))
+        return (exports.P_NAME, "", "", "", gap_text(test))
     reason = f"; {gap_text(test.p)}" if isinstance(test.p, Gap) else ""
-    return (P_NAME, _number(test.p), "", "", f"{test.method}{reason}")
+    return (exports.P_NAME, _number(test.p), "", "", f"{test.method}{reason}")
 
 
 def _converted(conversion: Conversion | Gap) -> tuple[Row, ...]:
@@ -143,7 +136,7 @@ def _converted(conversion: Conversion | Gap) -> tuple[Row, ...]:
     if isinstance(conversion, Gap) or conversion.baseline_from == "reference":
         return ()
     baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
-    return (_figure(CONVERTED.format(baseline=baseline), conversion.risk_ratio),)
+    return (_figure(exports.CONVERTED.format(baseline=baseline), conversion.risk_ratio),)
 
 
 def _patient(outcome: Outcome, patient: PatientFindings | Gap) -> tuple[Row, ...]:
@@ -152,18 +145,18 @@ def _patient(outcome: Outcome, patient: PatientFindings | Gap) -> tuple[Row, ...
         return ()
     baseline = lines.baseline_text(patient.baseline, patient.baseline_from)
     needed = patient.number_needed
-    kind = "NNT" if isinstance(needed, Gap) or needed.kind == "neither" else needed.kind
+    rows = exports.PATIENT_ROWS
 
     def named(name: str) -> str:
-        return PATIENT.format(column=labels.COLUMNS["patient"], baseline=baseline, name=name)
+        return exports.PATIENT.format(column=labels.COLUMNS["patient"], baseline=baseline, name=name)
 
     return (
         _text(named(basis(outcome, patient))),
-        _figure(named("risk without"), patient.without),
-        _figure(named("risk with"), patient.with_),
-        _figure(named("difference"), patient.difference),
-        _measure(named(kind), needed),
-        _figure(named("risk ratio"), patient.risk_ratio),
+        _figure(named(rows["without"]), patient.without),
+        _figure(named(rows["with"]), patient.with_),
+        _figure(named(rows["difference"]), patient.difference),
+        _measure(named(limits.needed_kind(needed)), needed),
+        _figure(named(rows["risk_ratio"]), patient.risk_ratio),
     )
 
 
@@ -175,7 +168,7 @@ def _number(number: float | Gap) -> str:
     """The number in full, the point as its decimal mark; blank where there is none."""
     if isinstance(number, Gap):
         return ""
-    return INFINITY if isinf(number) else repr(float(number))
+    return exports.SHEET_INFINITY if isinf(number) else repr(float(number))
 
 
 def _safe(text: str) -> str:

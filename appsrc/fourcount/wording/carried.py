@@ -72,17 +72,16 @@ def interval(patient: PatientFindings, choices: Choices, people: int) -> str:
         return _size(x, people)
 
     interval = limits.sided(patient.difference.interval, patient.difference.estimate, write)
-    return f"{numbers.level(choices.level)} interval {interval}" if interval else ""
+    return f"{limits.interval_name(choices.level)} {interval}" if interval else ""
 
 
 def number_needed(needed: AnyNumberNeeded | Gap, outcome: Outcome) -> str:
     """The number needed of this column, told apart from that of the study."""
     if isinstance(needed, Gap):
         return gap_text(needed)
-    kind = "NNT" if needed.kind == "neither" else needed.kind
     interval = limits.number_needed_interval(needed)
     value = f"{numbers.number_needed(needed.estimate)} ({interval})"
-    return f"{kind} at this starting risk {value}{names.if_caused(outcome)}."
+    return f"{limits.needed_kind(needed)} at this starting risk {value}{names.if_caused(outcome)}."
 
 
 def reason(gap: Gap, patient: PatientFindings) -> str:

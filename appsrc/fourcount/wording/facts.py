@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from collections.abc import Callable, Mapping
 
-from fourcount.wording import numbers
+from fourcount.wording import labels, numbers
 
 Fact = str | int | float
 
@@ -26,12 +26,6 @@ MEASURE_NAMES = {
     "odds_ratio": "odds ratio",
 }
 RATIO_OF_PREVALENCES = "prevalence ratio"
-DESIGN_NAMES = {
-    "trial": "randomised trial",
-    "cohort": "cohort study",
-    "survey": "cross-sectional survey",
-    "case-control": "case-control study",
-}
 COUNT_WORDS = ("None", "One", "Two", "Three", "Four")
 STAND_INS = {
     "text": "This",
@@ -99,7 +93,7 @@ def _measure_name(key: str) -> str:
 
 
 def _design_name(key: str) -> str:
-    return DESIGN_NAMES.get(key, key)
+    return labels.DESIGNS.get(key, key)
 
 
 NUMERIC = frozenset({"baseline", "study", "risk", "odds_ratio", "risk_ratio", "value", "count"})

@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable
 
 from fourcount.appraisal.findings import AnyNumberNeeded, Gap, Interval, NumberNeededLimit, Range
-from fourcount.wording import numbers
+from fourcount.wording import labels, numbers
 from fourcount.wording.gaps import limit_text
 
 AnyInterval = Interval | Range | Gap
@@ -26,6 +26,16 @@ HIGHER = "higher"
 def side(difference: float) -> str:
     """The word for the side of a difference: fewer or more."""
     return FEWER if difference < 0 else MORE
+
+
+def interval_name(level: float) -> str:
+    """``95% interval``: no interval is said without its level."""
+    return labels.INTERVAL_HEAD.format(level=numbers.level(level))
+
+
+def needed_kind(needed: AnyNumberNeeded | Gap | None) -> str:
+    """NNTB or NNTH; NNT where it is neither, or is not given."""
+    return "NNT" if needed is None or isinstance(needed, Gap) or needed.kind == "neither" else needed.kind
 
 
 def beyond(interval: AnyInterval, least: float, most: float) -> str:

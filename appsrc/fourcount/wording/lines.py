@@ -99,8 +99,7 @@ def measure_name(key: str, outcome: Outcome, needed: AnyNumberNeeded | None = No
     """What a line calls its measure."""
     risk = names.sentence_case(names.risk_name(outcome))
     if key == "number_needed":
-        kind = "NNT" if needed is None or needed.kind == "neither" else needed.kind
-        return f"{kind} in the study"
+        return f"{limits.needed_kind(needed)} in the study"
     return {
         "risk_difference": "Difference",
         "risk_reference": f"{risk}, {names.label_within(outcome, 'reference')}",

@@ -15,7 +15,7 @@ def with_interval(key: str, figure: Figure, choices: Choices) -> str:
     """A figure's interval behind its estimate: " (95% interval 3.3 to 12.4)", or "" where there is none."""
     if isinstance(figure.interval, Gap):
         return ""
-    return f" ({numbers.level(choices.level)} interval {lines.interval_text(key, figure)})"
+    return f" ({limits.interval_name(choices.level)} {lines.interval_text(key, figure)})"
 
 
 def difference(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
@@ -38,7 +38,7 @@ def number_needed(outcome: Outcome, needed: AnyNumberNeeded, findings: OutcomeFi
     """The number with its comparison, its time, the risk it starts from, and what it does not say."""
     groups = f"{names.in_group(outcome, 'index')} rather than {names.in_group(outcome, 'reference')}"
     span = names.over_span(outcome) or f"({lines.NO_SPAN})"
-    interval = f"({numbers.level(choices.level)} interval {limits.number_needed_interval(needed)})"
+    interval = f"({limits.interval_name(choices.level)} {limits.number_needed_interval(needed)})"
     if needed.kind == "neither" or isinstance(findings.counts, Gap):
         return (
             "Both groups had the event equally often, so no number of people makes a difference of one "

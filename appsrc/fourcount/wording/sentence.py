@@ -56,7 +56,7 @@ def measure_sentence(key: str, outcome: Outcome, findings: OutcomeFindings, choi
     if isinstance(measure.estimate, Gap):
         if isinstance(measure.interval, Gap):
             return gap_text(measure.estimate)
-        interval = f"{numbers.level(choices.level)} interval is {lines.interval_text(key, measure)}"
+        interval = f"{limits.interval_name(choices.level)} is {lines.interval_text(key, measure)}"
         return f"{gap_text(measure.estimate)} Its {interval}."
     return MEANINGS[key](outcome, measure, findings, choices)
 
@@ -121,7 +121,7 @@ def _difference(difference: float, people: People, interval: Interval | Range | 
     said = f"That is {_size(difference, people)} {limits.side(difference)}"
     if isinstance(interval, Gap):
         return f"{said if difference else 'There is no interval'}. {gap_text(interval)}"
-    low, high, level = interval.low, interval.high, f"({numbers.level(choices.level)} interval)"
+    low, high, level = interval.low, interval.high, f"({limits.interval_name(choices.level)})"
     if isinstance(low, Gap) or isinstance(high, Gap):
         return f"{said}."
     if limits.beyond(interval, -1.0, 1.0):
