@@ -8,6 +8,7 @@ import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
+from fourcount.appraisal.findings import Gap, Interval, Range
 from fourcount.record.outcome import EventsAndOthers
 from fourcount.record.paper import Choices
 from fourcount.wording import numbers
@@ -180,4 +181,29 @@ def test_two_small_risks_are_told_apart():
     """10 and 5.4 in 100,000 are not both "1 in 10,000"; risks of many people may be told alike."""
     small = choose(0.000054, 0.0001, 0.000046)
     assert (small.denominator, small.reference, small.index, small.difference) == (100_000, 5, 10, 5)
+    assert choose(0.0008, 0.00083, 0.00003).denominator == 100_000
+    assert choose(0.0015, 0.00151, 0.00001).denominator == 10_000
     assert choose(0.5, 0.5000001, 0.0000001).denominator == 10_000
+    assert choose(0.000001, 0.000001, 0.0).denominator == 1_000_000
+
+
+def test_less_than_one_person_is_not_one():
+    """0.6 of 100 people are not told as 1 of 100, even where the rounded parts would add up."""
+    people = choose(0.016, 0.010, 0.006)
+    assert (people.denominator, people.reference, people.index, people.difference) == (1_000, 16, 10, 6)
+
+
+@pytest.mark.parametrize(
+    ("interval", "denominator"),
+    [
+        (Interval(low=0.01, high=0.05), 100),
+        (Interval(low=-0.03, high=0.03), 100),
+        (Interval(low=0.004, high=0.056), 1_000),
+        (Interval(low=0.026, high=0.034), 1_000),
+        (Range(low=0.004, high=Gap("beyond-one")), 1_000),
+        (Range(low=0.01, high=Gap("beyond-one")), 100),
+    ],
+)
+def test_finer_people_tell_the_limits_apart(interval, denominator):
+    """A limit that 100 people would round to no effect, or to the other limit, takes more people."""
+    assert choose(0.02, 0.05, 0.03, interval).denominator == denominator

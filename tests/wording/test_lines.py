@@ -190,6 +190,7 @@ def test_each_limit_of_a_difference_has_the_word_it_needs(low, high, estimate, t
         (-0.02, Gap("beyond-one"), -0.01, "2.0 fewer to past 100%"),
         (Gap("beyond-one"), 0.02, 0.01, "past 100% to 2.0 more"),
         (Gap("beyond-one"), -0.02, -0.05, "2.0 to past 100%"),
+        (Gap("formula-beyond-risks"), -0.02, -0.05, "2.0 to a withheld limit"),
     ],
 )
 def test_a_limit_beyond_everybody_is_on_its_own_side_of_no_effect(low, high, estimate, text):
@@ -203,6 +204,7 @@ def test_a_limit_beyond_everybody_is_on_its_own_side_of_no_effect(low, high, est
         ((9.0, "NNTB"), (31.0, "NNTB"), False, "9 to 31"),
         ((11.2, "NNTB"), (39.5, "NNTH"), True, "NNTB 12 to ∞ to NNTH 40"),
         ((11.2, "NNTB"), (math.inf, "NNTB"), False, "12 to ∞"),
+        ((9.0, "NNTB"), (math.inf, "neither"), False, "NNTB 9 to ∞"),
         ((1203.5, "NNTB"), (1e7, "NNTB"), False, "1,204 to 10,000,000"),
     ],
 )
@@ -222,6 +224,7 @@ WITHHELD = Gap("beyond-one")
         ("NNTH", WITHHELD, (28.0, "NNTH"), False, "up to 28; the lower limit is withheld"),
         ("NNTH", WITHHELD, (9.0, "NNTB"), True, "NNTH, limit withheld, to ∞ to NNTB 9"),
         ("NNTB", (3.0, "NNTB"), WITHHELD, True, "NNTB 3 to ∞ to NNTH, limit withheld"),
+        ("NNTH", (3.0, "NNTH"), WITHHELD, True, "NNTH 3 to ∞ to NNTB, limit withheld"),
         ("neither", (3.0, "NNTB"), WITHHELD, True, "NNTB 3 to ∞ to NNTH, limit withheld"),
         ("neither", (math.inf, "NNTH"), WITHHELD, False, "from ∞; the upper limit is withheld"),
     ],
@@ -248,6 +251,18 @@ def test_a_limit_beyond_everybody_is_said_beside_the_row(outcome_of, findings_of
     assert lines["number_needed"].note == gap_text(Gap("formula-beyond-risks"))
 
 
+def test_a_limit_beyond_both_ends_is_said_so(outcome_of, findings_of):
+    """Wald's interval of 1 of 2 leaves the scale on both sides."""
+    lines = lines_of(outcome_of((1, 1, 1, 1)), findings_of, Choices(family="textbook"))
+    assert lines["risk_index"].note == "the bare formula reaches below 0% and beyond 100%"
+
+
+def test_a_risk_without_an_upper_limit_keeps_its_sign():
+    """The sign of per cent stands behind the last number there is."""
+    assert limits.percent_interval(Range(low=0.138, high=Gap("beyond-one")), 0.171) == "13.8% to past 100%"
+    assert limits.percent_interval(Interval(low=0.138, high=0.211), 0.171) == "13.8 to 21.1%"
+
+
 def test_no_limit_is_said_to_lie_beyond_where_none_does(outcome_of, findings_of):
     """The score family's limits are possible whatever the table."""
     lines = lines_of(outcome_of((9, 1, 1, 9)), findings_of)
@@ -262,6 +277,8 @@ def test_no_limit_is_said_to_lie_beyond_where_none_does(outcome_of, findings_of)
         (0.88, 0.60, 1.30, "40% lower to 30% higher"),
         (2.0, 0.9, math.inf, "10% lower to ∞ higher"),
         (0.5, 0.0, 1.0, "0% to 100%"),
+        (1.2, 0.9, 1.6, "10% lower to 60% higher"),
+        (1.0, 0.8, 1.0, "20% lower to 0%"),
     ],
 )
 def test_a_relative_interval_has_the_word_it_needs(ratio, low, high, text):

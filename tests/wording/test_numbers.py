@@ -123,6 +123,7 @@ def test_a_limit_takes_the_decimals_of_its_estimate(limit, estimate, text):
         (0.9949, "0.99"),
         (0.995, ">0.99"),
         (0.99999, ">0.99"),
+        (1 - 1e-13, "1"),
         (1.0, "1"),
     ],
 )
@@ -157,6 +158,7 @@ def test_a_number_needed_is_rounded_up_but_not_by_a_floats_noise(value, text):
         (0.000004, "0.00040", "0.0040"),
         (0.0004, "0.040", "0.40"),
         (1e-9, "<0.0001", "<0.001"),
+        (0.4123, "41.2", "412"),
         (-1.0, "100.0", "1,000"),
     ],
 )

@@ -150,6 +150,36 @@ def test_each_measure_says_what_it_means_and_what_it_is_not(outcome_of, findings
     assert measure_sentence(key, outcome, findings_of(outcome), Choices()) == sentence
 
 
+EQUAL = {
+    "risk_difference": (
+        "Per 100 people as many fell at least once within 12 months with night lights as with usual care (95% interval "
+        "8.8 fewer to 8.8 more)."
+    ),
+    "number_needed": (
+        "Both groups had the event equally often, so no number of people makes a difference of one (95% interval NNTB "
+        "12 to ∞ to NNTH 12). An interval through infinity is compatible with one fewer and with one more."
+    ),
+    "risk_ratio": (
+        "The risk with night lights was 1.00 times that with usual care (95% interval 0.44 to 2.25). By itself it does "
+        "not say how large the risk is: it was 10.0% with usual care and 10.0% with night lights."
+    ),
+}
+
+
+@pytest.mark.parametrize(("key", "sentence"), EQUAL.items())
+def test_equal_groups_are_neither_fewer_nor_more(outcome_of, findings_of, key, sentence):
+    """A difference of 0 has an interval and no side."""
+    outcome = outcome_of((10, 90, 10, 90))
+    assert measure_sentence(key, outcome, findings_of(outcome), Choices()) == sentence
+
+
+def test_a_number_needed_through_infinity_says_what_that_is_compatible_with(outcome_of, findings_of):
+    """Beside the interval itself."""
+    outcome = outcome_of((12, 88, 10, 90))
+    sentence = measure_sentence("number_needed", outcome, findings_of(outcome), Choices())
+    assert "The interval runs through infinity: compatible with one fewer and with one more." in sentence
+
+
 def test_a_figure_without_estimate_gives_the_reason_and_its_interval(outcome_of, findings_of):
     """0/0 has an interval and no value."""
     outcome = outcome_of((0, 50, 0, 40))

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, OutcomeFindings
+from fourcount.appraisal.findings import AnyNumberNeeded, Counts, Figure, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
@@ -39,19 +39,18 @@ def number_needed(outcome: Outcome, needed: AnyNumberNeeded, findings: OutcomeFi
     groups = f"{names.in_group(outcome, 'index')} rather than {names.in_group(outcome, 'reference')}"
     span = names.over_span(outcome) or f"({lines.NO_SPAN})"
     interval = f"({limits.interval_name(choices.level)} {limits.number_needed_interval(needed)})"
-    if needed.kind == "neither" or isinstance(findings.counts, Gap):
+    if needed.kind == "neither":
         return (
             "Both groups had the event equally often, so no number of people makes a difference of one "
             f"{interval}. An interval through infinity is {COMPATIBLE_KINDS}."
         )
-    figure = findings.measures["risk_difference"]
-    change = _one(_estimate(figure) if isinstance(figure, Figure) else 0.0)
-    people = lines.whole_needed(findings.counts)
+    change = f"one {limits.side(_estimate_of('risk_difference', findings))}"
+    people = lines.whole_needed(_counts(findings))
     through = f" The interval runs through infinity: {COMPATIBLE_KINDS}." if needed.through_infinity else ""
     event, withheld = names.event_words(outcome), limits.withheld_needed(needed)
     return (
         f"{needed.kind} {people} {interval}: for every {people} people {groups} {span}, {change} {event}, "
-        f"on average{names.if_caused(outcome)}, from {_reference_risk(outcome, findings)}.{through} "
+        f"on average{names.if_caused(outcome)}, from a risk of {_risk_in('reference', outcome, findings)}.{through} "
         f"It does not say who it is, nor that the others gain or lose nothing.{f' {withheld}' if withheld else ''}"
     )
 
@@ -143,9 +142,7 @@ def _odds(group: names.Group, outcome: Outcome, figure: Figure, findings: Outcom
 
 
 def _group_counts(group: names.Group, findings: OutcomeFindings) -> tuple[int, int]:
-    counts = findings.counts
-    if isinstance(counts, Gap):
-        return 0, 0
+    counts = _counts(findings)
     if group == "index":
         return counts.index_events, counts.index_total
     return counts.reference_events, counts.reference_total
@@ -157,24 +154,12 @@ def _times(name: str, outcome: Outcome, ratio: str) -> str:
 
 
 def _two_risks(outcome: Outcome, findings: OutcomeFindings) -> str:
-    parts = []
-    for group in ("reference", "index"):
-        figure = findings.measures[f"risk_{group}"]
-        if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
-            where = names.in_group(outcome, "reference" if group == "reference" else "index")
-            parts.append(f"{numbers.percent(figure.estimate)} {where}")
-    return "it was " + " and ".join(parts)
+    return f"it was {_risk_in('reference', outcome, findings)} and {_risk_in('index', outcome, findings)}"
 
 
-def _reference_risk(outcome: Outcome, findings: OutcomeFindings) -> str:
-    figure = findings.measures["risk_reference"]
-    if not isinstance(figure, Figure) or isinstance(figure.estimate, Gap):
-        return "the study’s own risk"
-    return f"a risk of {numbers.percent(figure.estimate)} {names.in_group(outcome, 'reference')}"
-
-
-def _one(change: float) -> str:
-    return f"one {limits.side(change)}"
+def _risk_in(group: names.Group, outcome: Outcome, findings: OutcomeFindings) -> str:
+    """``17.1% with usual care``."""
+    return f"{numbers.percent(_estimate_of(f'risk_{group}', findings))} {names.in_group(outcome, group)}"
 
 
 def _spanned(words: str, outcome: Outcome) -> str:
@@ -187,6 +172,21 @@ def _estimate(figure: Figure) -> float:
     if isinstance(figure.estimate, Gap):
         raise TypeError(figure.estimate.key)
     return figure.estimate
+
+
+def _estimate_of(key: str, findings: OutcomeFindings) -> float:
+    """The estimate of another measure, where this one cannot be without it."""
+    figure = findings.measures[key]
+    if not isinstance(figure, Figure):
+        raise TypeError(key)
+    return _estimate(figure)
+
+
+def _counts(findings: OutcomeFindings) -> Counts:
+    """The four counts of a table that is known to have them."""
+    if isinstance(findings.counts, Gap):
+        raise TypeError(findings.counts.key)
+    return findings.counts
 
 
 def _no_interval(figure: Figure) -> str:
