@@ -5,7 +5,7 @@ from __future__ import annotations
 from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import limits, names, numbers
+from fourcount.wording import limits, names, numbers, of_people
 from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.headline import choose
 
@@ -26,17 +26,7 @@ def count(figure: Figure, people: int) -> str:
     """``12 in 100``."""
     if isinstance(figure.estimate, Gap):
         return NOT_GIVEN
-    return f"{whole_people(figure.estimate, people)} in {numbers.whole(people)}"
-
-
-def whole_people(risk: float, people: int) -> str:
-    """Whole people, never nobody for somebody nor everybody for nearly everybody."""
-    n = numbers.people(risk, people)
-    if n == 0 and risk:
-        return "under 1"
-    if n >= people and risk < 1:
-        return f"over {numbers.whole(people - 1)}"
-    return numbers.whole(n)
+    return f"{of_people.affected(figure.estimate, people)} in {numbers.whole(people)}"
 
 
 def percentage(figure: Figure, people: int) -> str:
@@ -44,8 +34,7 @@ def percentage(figure: Figure, people: int) -> str:
     if isinstance(figure.estimate, Gap):
         return ""
     risk = figure.estimate
-    n = numbers.people(risk, people)
-    if (n == 0 and risk) or (n >= people and risk < 1):
+    if of_people.hidden(risk, people):
         return numbers.percent_whole(risk)
     return f"{numbers.fixed_percent(risk, len(str(people)) - 3)}%"
 
@@ -57,19 +46,14 @@ def change(difference: Figure, people: int) -> str:
         return ""
     if change == 0:
         return f"The same number in {numbers.whole(people)}"
-    return f"{_size(change, people)} {limits.side(change)} in {numbers.whole(people)}"
-
-
-def _size(change: float, people: int) -> str:
-    n = numbers.people(change, people)
-    return "under 1" if n == 0 and change else numbers.whole(n)
+    return f"{of_people.apart(change, people)} {limits.side(change)} in {numbers.whole(people)}"
 
 
 def interval(patient: PatientFindings, choices: Choices, people: int) -> str:
     """``95% interval 3 to 8``, or "" where there is none."""
 
     def write(x: float) -> str:
-        return _size(x, people)
+        return of_people.apart(x, people)
 
     interval = limits.sided(patient.difference.interval, patient.difference.estimate, write)
     return f"{limits.interval_name(choices.level)} {interval}" if interval else ""

@@ -9,7 +9,7 @@ from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFi
 from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
-from fourcount.wording import carried, limits, names, numbers
+from fourcount.wording import carried, limits, names, numbers, of_people
 from fourcount.wording.basis import basis
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
@@ -121,14 +121,7 @@ def _others(figure: Figure, people: int, outcome: Outcome) -> str:
     """The other frame: ``88 did not fall``. It is what the rounded count leaves, so that the two make the whole."""
     if isinstance(figure.estimate, Gap):
         return ""
-    n, risk = numbers.people(figure.estimate, people), figure.estimate
-    if n == 0 and risk:
-        left = f"over {numbers.whole(people - 1)}"
-    elif n >= people and risk < 1:
-        left = "under 1"
-    else:
-        left = numbers.whole(people - n)
-    return f"{left} {names.other_words(outcome)}"
+    return f"{of_people.unaffected(figure.estimate, people)} {names.other_words(outcome)}"
 
 
 def _key(verb: str, outcome: Outcome) -> str:
@@ -224,4 +217,4 @@ def _affected(figure: Figure, people: int) -> str:
     """``12 (12%)``."""
     if isinstance(figure.estimate, Gap):
         return carried.NOT_GIVEN
-    return f"{carried.whole_people(figure.estimate, people)} ({carried.percentage(figure, people)})"
+    return f"{of_people.affected(figure.estimate, people)} ({carried.percentage(figure, people)})"

@@ -5,7 +5,7 @@ from __future__ import annotations
 from fourcount.appraisal.findings import Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import carried, names, numbers
+from fourcount.wording import carried, names, numbers, of_people
 
 AS_IN_THE_STUDY = "The study’s figures hold as they stand."
 
@@ -35,4 +35,4 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
 
 
 def _people(risk: float | Gap, people: int) -> str:
-    return carried.NOT_GIVEN if isinstance(risk, Gap) else carried.whole_people(risk, people)
+    return carried.NOT_GIVEN if isinstance(risk, Gap) else of_people.affected(risk, people)

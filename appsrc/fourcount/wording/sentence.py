@@ -6,12 +6,11 @@ from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, Interval,
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.methods import test
-from fourcount.wording import limits, lines, meanings, names, numbers
+from fourcount.wording import limits, lines, meanings, names, numbers, of_people
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import DO_NOT_ADD_UP, People, choose, limits_apart
 
 COMPATIBLE = "compatible with fewer and with more"
-UNDER_ONE = "under 1"
 PAST_EVERYBODY = "The bare formula’s {level} interval reaches past 100 in 100, so it is not put into people."
 NO_P = "There is no p: "
 P_FOLLOWS = "The p value takes a moment and will follow."
@@ -97,28 +96,27 @@ def _people_headline(outcome: Outcome, figures: tuple[Figure, Figure, Figure], c
     risk_reference, risk_index, gap = (x for x in estimates if not isinstance(x, Gap))
     people = choose(risk_reference, risk_index, gap, interval)
     of = f"Of {numbers.whole(people.denominator)} people {names.in_group(outcome, 'reference')}"
-    first = f"{of} {_about(people.reference, risk_reference, people)} {names.event_words(outcome)}"
+    first = f"{of} {_about(risk_reference, people.denominator)} {names.event_words(outcome)}"
     span = names.within_span(outcome)
     second = (
         f"of {numbers.whole(people.denominator)} {names.in_group(outcome, 'index')} "
-        f"{'also ' if gap == 0 else ''}{_about(people.index, risk_index, people)}"
+        f"{'also ' if gap == 0 else ''}{_about(risk_index, people.denominator)}"
     )
     rounding = "" if people.add_up else f" {DO_NOT_ADD_UP}"
     said = f"{first}{f' {span}' if span else ''}; {second}."
     return f"{said} {_difference(gap, people, interval, choices)}{rounding}"
 
 
-def _about(n: int, risk: float, people: People) -> str:
-    if n in (0, people.denominator):
-        if 0 < risk < 1:
-            return UNDER_ONE if n == 0 else f"over {numbers.whole(n - 1)}"
-        return "none" if n == 0 else "all"
-    return f"about {numbers.whole(n)}"
+def _about(risk: float, people: int) -> str:
+    """``about 17``; none and all only where they are."""
+    if risk in (0.0, 1.0):
+        return "all" if risk else "none"
+    return f"about {of_people.affected(risk, people)}"
 
 
 def _difference(difference: float, people: People, interval: Interval | Range | Gap, choices: Choices) -> str:
     """The difference and its interval in the same whole people."""
-    said = f"That is {_size(difference, people)} {limits.side(difference)}"
+    said = f"That is {of_people.apart(difference, people.denominator)} {limits.side(difference)}"
     if isinstance(interval, Gap):
         return f"{said if difference else 'There is no interval'}. {gap_text(interval)}"
     low, high, level = interval.low, interval.high, f"({limits.interval_name(choices.level)})"
@@ -135,18 +133,12 @@ def _difference(difference: float, people: People, interval: Interval | Range | 
 
 def _reach(interval: Interval | Range, people: People, level: str) -> str:
     """Both limits on the estimate's side, where whole people can tell them apart."""
-    few, many = sorted(abs(x) for x in (interval.low, interval.high) if not isinstance(x, Gap))
+    sizes = sorted(abs(x) for x in (interval.low, interval.high) if not isinstance(x, Gap))
+    few, many = (of_people.apart(size, people.denominator) for size in sizes)
     if limits_apart(people.denominator, interval):
-        return f", and could be as few as {_size(few, people)} or as many as {_size(many, people)} {level}"
-    if _size(few, people) == _size(many, people):
-        return ""
-    return f", and could be from {_size(few, people)} to {_size(many, people)} {level}"
-
-
-def _size(limit: float, people: People) -> str:
-    n = numbers.people(limit, people.denominator)
-    return UNDER_ONE if n == 0 and limit else numbers.whole(n)
+        return f", and could be as few as {few} or as many as {many} {level}"
+    return "" if few == many else f", and could be from {few} to {many} {level}"
 
 
 def _sided(limit: float, people: People) -> str:
-    return f"{_size(limit, people)} {limits.side(limit)}" if limit else "none"
+    return f"{of_people.apart(limit, people.denominator)} {limits.side(limit)}" if limit else "none"
