@@ -206,6 +206,16 @@ def test_a_given_starting_risk_is_in_every_export() -> None:
     assert "For one patient" not in on_screen(OUTCOME)
 
 
+def test_a_listing_says_both_risks_of_a_patient() -> None:
+    """As percentages with their digits; where a risk is not given, so much is said in its place."""
+    listed = on_screen(msgspec.structs.replace(OUTCOME, patient=Patient(starting_risk_text="12%"))).splitlines()
+    assert "  Without: usual care, 12%" in listed
+    assert "  With: night lights, 6%" in listed
+    passing = on_screen(outcome_of((70, 339, 38, 374), risk="70%")).splitlines()
+    assert "  Without: reference group, 70%" in passing
+    assert "  With: index group, not given" in passing
+
+
 def test_every_copy_says_what_the_patients_figures_rest_on() -> None:
     """The starting risk, its source and the effect carried to it are in the letter, the sheet and the listing."""
     patient = Patient(starting_risk_text="12%", starting_risk_source_text="ward audit 2025")

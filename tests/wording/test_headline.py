@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import re
 
+import msgspec
 import pytest
 from hypothesis import given
 from hypothesis import strategies as st
@@ -185,6 +186,32 @@ def test_two_small_risks_are_told_apart():
     assert choose(0.0015, 0.00151, 0.00001).denominator == 10_000
     assert choose(0.5, 0.5000001, 0.0000001).denominator == 10_000
     assert choose(0.000001, 0.000001, 0.0).denominator == 1_000_000
+
+
+def test_without_an_interval_the_headline_says_why(outcome_of, findings_of):
+    """The textbook gives none where nobody had the event, nor where its width would be zero."""
+    choices = Choices(family="textbook")
+    none, parted = outcome_of((0, 50, 0, 50)), outcome_of((0, 50, 50, 0))
+    reason = "An interval of zero width is withheld; the score family gives a real one."
+    assert headline(none, findings_of(none, choices), choices).endswith(f"also none. There is no interval. {reason}")
+    assert headline(parted, findings_of(parted, choices), choices).endswith(f"none. That is 100 fewer. {reason}")
+
+
+@pytest.mark.parametrize(
+    ("low", "high", "ending"),
+    [
+        (0.0, 0.02, "anything from none to 2 more (95% interval)."),
+        (-0.02, 0.0, "anything from 2 fewer to none (95% interval)."),
+        (-0.02, 0.03, f"anything from 2 fewer to 3 more (95% interval): {COMPATIBLE}."),
+    ],
+)
+def test_a_limit_of_no_effect_is_none(outcome_of, findings_of, low, high, ending):
+    """It has no side, and is compatible with one side only."""
+    outcome = outcome_of((12, 88, 10, 90))
+    findings = findings_of(outcome)
+    difference = msgspec.structs.replace(findings.measures["risk_difference"], interval=Interval(low=low, high=high))
+    touching = msgspec.structs.replace(findings, measures={**findings.measures, "risk_difference": difference})
+    assert headline(outcome, touching, Choices()).endswith(ending)
 
 
 def test_less_than_one_person_is_not_one():

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import re
 
+import msgspec
 import pytest
 from hypothesis import given, settings
 from hypothesis import strategies as st
@@ -223,6 +224,13 @@ def test_without_randomisation_a_number_needed_supposes_a_cause(outcome_of, find
     if design != "case-control":
         told.append(measure_sentence("number_needed", outcome, findings, Choices()))
     assert [supposed] * len(told) == ["if the difference is caused by it" in text for text in told]
+
+
+def test_a_p_that_follows_says_so(outcome_of, findings_of):
+    """The reader waits for it, and is told that there will be one."""
+    findings = findings_of(outcome_of())
+    waiting = msgspec.structs.replace(findings, test=msgspec.structs.replace(findings.test, p=Gap("follows")))
+    assert p_sentence(waiting) == "The p value takes a moment and will follow."
 
 
 @pytest.mark.parametrize("family", FAMILIES)
