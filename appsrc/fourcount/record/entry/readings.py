@@ -58,9 +58,3 @@ class TableReading(msgspec.Struct, frozen=True, kw_only=True):
     first: GroupCounts
     second: GroupCounts
     marks: tuple[Mark, ...] = ()
-
-    @property
-    def complete(self) -> bool:
-        """Whether all four counts are known."""
-        groups = (self.first, self.second)
-        return all(g.left is not None and g.right is not None for g in groups)
