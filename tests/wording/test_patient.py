@@ -274,3 +274,33 @@ def test_an_interval_of_altered_counts_is_left_out_of_the_relative_words(outcome
     outcome = outcome_of((0, 50, 7, 43), patient=Patient(starting_risk_text=starting_risk))
     choices = Choices(family="textbook")
     assert "In relative words 100% lower." in patient_words(outcome, findings_of(outcome, choices), choices, 100).detail
+
+
+def test_an_endless_ratio_has_no_relative_words(outcome_of, findings_of):
+    """3/10 v 0/10: nothing can be so many per cent higher than nobody, and at 0% nothing follows."""
+    own = words_of(outcome_of((3, 7, 0, 10)), findings_of)
+    assert (own.without_count, own.with_count) == ("0 in 100", "30 in 100")
+    assert "relative words" not in own.detail
+    typed = words_of(outcome_of((3, 7, 0, 10), patient=at("0%")), findings_of)
+    assert typed.detail.startswith("An infinite effect says nothing at a starting risk of 0%")
+
+
+def test_a_risk_beyond_everybody_leaves_the_other_on_its_own_people(outcome_of, findings_of):
+    """0.4% without is 4 of the fewest people that can say so, and no interval is spoken of where there is none."""
+    words = words_of(outcome_of((50, 50, 1, 999), patient=at("0.4%")), findings_of, None)
+    assert (words.without_count, words.with_count) == ("4 in 1,000", "not given")
+    assert "uncertain" not in words.detail
+
+
+def test_an_interval_that_is_withheld_says_why(outcome_of, findings_of):
+    """The textbook gives nobody v everybody no interval."""
+    outcome, choices = outcome_of((0, 50, 50, 0)), Choices(family="textbook")
+    words = patient_words(outcome, findings_of(outcome, choices), choices, 100)
+    assert "An interval of zero width is withheld; the score family gives a real one." in words.detail
+    assert words.summary == "over 12 months"
+
+
+@pytest.mark.parametrize(("name", "key"), [("Falls", "falls avoided, on balance"), ("x" * 41, "avoided, on balance")])
+def test_a_long_name_stays_out_of_the_key(outcome_of, findings_of, name, key):
+    """A key has room for forty characters of it."""
+    assert words_of(outcome_of(name_text=name), findings_of).key_avoided == key

@@ -40,6 +40,7 @@ STAND_INS = {
     "events": "the count",
     "total": "another number",
     "typed": "one number",
+    "limit": "1,000,000,000",
     "side": "one side",
     "label": "comparison",
 }

@@ -52,7 +52,7 @@ MARK_TEXTS = {
     "decimal": "{text}: people are counted whole, without decimals",
     "point-in-thousands": "{text}: people are counted whole; a thousands mark is a comma, as in {comma}",
     "two-counts": "{text}: one count in each cell",
-    "too-large": "{text}: a count goes up to 1,000,000,000",
+    "too-large": "{text}: a count goes up to {limit}",
     "events-above-total": "{text}: more events than people; the events have to fit into the total",
     "total-disagrees": "{text}: the total here is {typed}, but the group’s total is {total}; check the paper",
     "percent-disagrees": "{text}: {events} of {total} does not round to this percentage; the count is used",
