@@ -17,18 +17,27 @@ RISKS: dict[str, names.Group] = {"risk_reference": "reference", "risk_index": "i
 
 
 def figure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[str, ...]:
-    """The lines of a whole table: "Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409"."""
+    """The lines of a whole table: "Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409".
+
+    Why an estimate, an interval or a limit is not there stands behind the first line in which it is missing.
+    """
     shown = {line.key: line for line in measure_lines(outcome, findings, choices)}
     level = limits.interval_name(choices.level)
     given, withheld = [], []
+    reasons: dict[str, None] = {}
     for key in ORDER:
         measure = findings.measures[key]
         if isinstance(measure, Gap):
             withheld.append(shown[key])
-        elif isinstance(measure, AnyNumberNeeded):
-            given.append(_number_needed(shown[key], measure, outcome, level))
-        else:
-            given.append(_figure(key, shown[key], outcome, findings, level))
+            continue
+        line = (
+            _number_needed(shown[key], measure, outcome, level)
+            if isinstance(measure, AnyNumberNeeded)
+            else _figure(key, shown[key], outcome, findings, level)
+        )
+        new = [reason for reason in _reasons(measure) if reason not in reasons]
+        reasons.update(dict.fromkeys(new))
+        given.append(". ".join((line, *new)))
     return (*given, *withheld_lines(withheld))
 
 
@@ -43,19 +52,25 @@ def withheld_lines(withheld: list[MeasureLine]) -> tuple[str, ...]:
 def _number_needed(line: MeasureLine, needed: AnyNumberNeeded, outcome: Outcome, level: str) -> str:
     span = names.over_span(outcome)
     over = f" {span}" if span else f", {lines.NO_SPAN}"
-    said = f"{limits.needed_kind(needed)} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
-    return ". ".join(part for part in (said, limits.withheld_needed(needed)) if part)
+    return f"{limits.needed_kind(needed)} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
 
 
 def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFindings, level: str) -> str:
     figure = findings.measures[key]
     if not isinstance(figure, Figure):
         raise TypeError(key)
-    interval = "" if isinstance(figure.interval, Gap) else f" ({level} {line.interval})"
-    unit = exports.PER_100 if key == "risk_difference" and not isinstance(figure.estimate, Gap) else ""
-    parts = (f"{_name(key, line, outcome)}: {line.estimate}{unit}{interval}", *_more(key, figure, outcome, findings))
-    reasons = dict.fromkeys(gap_text(part) for part in (figure.estimate, figure.interval) if isinstance(part, Gap))
-    return ". ".join((", ".join(part for part in parts if part), *reasons))
+    unit = exports.PER_100 if key == "risk_difference" else ""
+    said = f"{_name(key, line, outcome)}: {line.estimate}{unit} ({level} {line.interval})"
+    return ", ".join(part for part in (said, *_more(key, figure, outcome, findings)) if part)
+
+
+def _reasons(measure: Figure | AnyNumberNeeded) -> tuple[str, ...]:
+    """Why a part of a measure is not there, each reason once."""
+    if isinstance(measure, AnyNumberNeeded):
+        withheld = limits.withheld_needed(measure)
+        return (withheld,) if withheld else ()
+    gaps = (part for part in (measure.estimate, measure.interval) if isinstance(part, Gap))
+    return tuple(dict.fromkeys(map(gap_text, gaps)))
 
 
 def _name(key: str, line: MeasureLine, outcome: Outcome) -> str:
@@ -71,7 +86,7 @@ def _more(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings)
     counts = findings.counts
     if isinstance(counts, Gap):
         return ()
-    more = [half_added(figure)]
+    more = []
     if key in RISKS:
         events, people = counts.index_events, counts.index_total
         if RISKS[key] == "reference":
@@ -81,4 +96,4 @@ def _more(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings)
         more.append(limits.relative(figure.estimate))
     if key == "odds_ratio":
         more.append(lines.conversion_text(findings.conversion, names.risk_name(outcome)))
-    return tuple(more)
+    return (*more, half_added(figure))

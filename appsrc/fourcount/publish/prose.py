@@ -25,14 +25,13 @@ def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, versio
     ``version`` and ``today`` are given by whoever asks: this room looks at no clock.
     """
     choices = record.choices
-    patient = one_line(_patient(outcome, findings, choices))
     paragraphs = [
         one_line(picture_heading(record, outcome)),
         one_line(_counts(outcome, findings)),
         one_line(headline(outcome, findings, choices)),
         _figures(outcome, findings, choices),
-        patient,
-        _cautions(findings, patient),
+        one_line(_patient(outcome, findings, choices)),
+        _cautions(findings),
         one_line(" ".join(STANDING_FULL)),
         made_with(choices, version, today),
     ]
@@ -75,10 +74,8 @@ def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
     return f"{labels.COLUMNS['patient']}: {names.mid_sentence(rests)} {said}"
 
 
-def _cautions(findings: OutcomeFindings, said: str) -> str:
-    """The cautions that hold, without what was ``said`` just before."""
-    texts = [one_line(caution_text(caution)) for caution in findings.cautions]
-    bullets = _list(text for text in texts if text not in said)
+def _cautions(findings: OutcomeFindings) -> str:
+    bullets = _list(caution_text(caution) for caution in findings.cautions)
     return f"{labels.COLUMNS['cautions']}:\n{bullets}" if bullets else ""
 
 
