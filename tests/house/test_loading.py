@@ -6,11 +6,36 @@ import json
 import subprocess
 import sys
 
-PROBE = "import json, sys; print(json.dumps(sorted({name.split('.')[0] for name in sys.modules})))"
+PROBE = "import json, sys; print(json.dumps(sorted(globals().get('loaded', sys.modules))))"
+PAINTED = """
+import os, sys, tempfile
+from pathlib import Path
+
+import fourcount.face.running_start
+from fourcount.face.application import make_application, make_window
+from fourcount.face.later import Later
+
+os.environ["QT_QPA_PLATFORM"] = "offscreen"
+application, later, loaded = make_application(["fourcount"]), Later(), set()
+with tempfile.TemporaryDirectory() as folder:
+    window = make_window(Path(folder), later=later)
+    paint = type(window).paintEvent
+
+    def painted(self, event):
+        paint(self, event)
+        loaded.update(sys.modules if not loaded else ())
+
+    type(window).paintEvent = painted
+    window.first_painted.connect(application.quit)
+    window.show()
+    application.exec()
+    later.finish(60.0)
+"""
+"""A window up to the end of its first paint, and what was ``loaded`` by then."""
 
 
 def loaded_after(code: str) -> set[str]:
-    """The top-level modules that a fresh interpreter holds after running ``code``."""
+    """The modules that a fresh interpreter holds after running ``code``, or those that the code names itself."""
     run = subprocess.run([sys.executable, "-c", f"{code}\n{PROBE}"], capture_output=True, text=True, check=False)
     assert run.returncode == 0, run.stderr
     return set(json.loads(run.stdout.splitlines()[-1]))
@@ -30,7 +55,10 @@ def test_an_answer_needs_no_window() -> None:
 
 
 def test_the_window_paints_before_numpy() -> None:
-    """Importing the application loads Qt, but neither numpy nor scipy."""
-    loaded = loaded_after("import fourcount.face.application")
+    """When a window has painted, Qt is loaded, but neither numpy nor scipy, nor any room that works out figures."""
+    loaded = loaded_after(PAINTED)
     assert "PySide6" in loaded
     assert not loaded & {"numpy", "scipy", "matplotlib"}
+    rooms = {name.split(".")[1] for name in loaded if name.startswith("fourcount.")}
+    assert {"face", "ink", "picture", "record", "wording"} <= rooms
+    assert not rooms & {"appraisal", "stats", "publish"}

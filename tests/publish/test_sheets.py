@@ -86,3 +86,11 @@ def test_a_sheet_leaves_blank_what_is_withheld_and_repeats_no_row() -> None:
     needed = found["For one patient, 45%: NNTH"]
     assert (needed[2], bool(NUMBER.fullmatch(needed[3])), "would pass 100%" in needed[4]) == ("", True, True)
     assert not any("as a risk ratio" in row[0] for row in table_of(outcome_of((80, 20, 40, 60))))
+
+
+def test_a_reason_stands_once_in_its_row() -> None:
+    """An interval that is withheld leaves two blanks and one reason."""
+    found = {row[0]: row for row in table_of(outcome_of((0, 50, 0, 50)), Choices(family="textbook"))}
+    _, estimate, low, high, method = found["Risk, reference group"]
+    assert (estimate, low, high) == ("0.0", "", "")
+    assert method == "wald; An interval of zero width is withheld; the score family gives a real one."

@@ -91,6 +91,16 @@ def test_a_correction_in_use_is_said_beside_the_figure(outcome_of, findings_of):
     assert lines["risk_index"].note.startswith("An interval of zero width is withheld")
 
 
+def test_a_correction_and_a_reason_are_two_sentences(outcome_of, findings_of):
+    """What is no sentence ends before one begins."""
+    line = lines_of(outcome_of((0, 50, 0, 50)), findings_of, Choices(family="textbook"))["risk_ratio"]
+    assert line.note == (
+        "interval with half added to the events and to the people of each group (Walter): it need not hold the "
+        "estimate; ratio of the other outcome 1.00. Nobody in either group had the event, so this figure is not "
+        "determined."
+    )
+
+
 def test_zero_and_infinity_are_shown_as_they_are(outcome_of, findings_of):
     """And 0/0 is said not to be determined, with its interval."""
     assert text(lines_of(outcome_of((50, 0, 1, 49)), findings_of)["odds_ratio"])[2:] == ("∞", "322 to ∞")
