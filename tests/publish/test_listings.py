@@ -42,3 +42,10 @@ def test_one_line_is_one_line(text: str) -> None:
 def test_words_joined_by_invisible_marks_stay_joined() -> None:
     """Letters of scripts that need a joiner keep it."""
     assert one_line("\u0645\u06cc\u200c\u0627\u0641\u062a\u062f") == "\u0645\u06cc\u200c\u0627\u0641\u062a\u062f"
+
+
+def test_a_listing_says_a_caution_once() -> None:
+    """What stands among the patient's figures is not said again among the cautions."""
+    text = " ".join(on_screen(msgspec.structs.replace(OUTCOME, patient=Patient(starting_risk_text="12%"))).split())
+    assert text.count("The interval leaves out that 12% is itself uncertain.") == 1
+    assert text.index("is itself uncertain") < text.index("Cautions") < text.index("is assumed to be the same")

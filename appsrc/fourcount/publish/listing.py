@@ -26,14 +26,15 @@ def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
     if isinstance(findings.counts, Gap):
         return _joined([_wrapped(headline(outcome, findings, choices)), _wrapped(STANDING)])
     lines = measure_lines(outcome, findings, choices)
+    patient = _patient(outcome, findings, choices)
     return _joined(
         [
             _wrapped(headline(outcome, findings, choices)),
             _figures([line for line in lines if not line.withheld], choices),
             *map(_wrapped, withheld_lines([line for line in lines if line.withheld])),
             _wrapped(p_sentence(findings)),
-            _patient(outcome, findings, choices),
-            _cautions(findings),
+            patient,
+            _cautions(findings, said=one_line(patient)),
             _wrapped(STANDING),
         ]
     )
@@ -73,11 +74,11 @@ def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
     return "\n".join([labels.COLUMNS["patient"], *(_wrapped(line, INDENT) for line in lines if line)])
 
 
-def _cautions(findings: OutcomeFindings) -> str:
-    if not findings.cautions:
-        return ""
-    bullets = (_wrapped(caution_text(caution), "- ", INDENT) for caution in findings.cautions)
-    return "\n".join([labels.COLUMNS["cautions"], *bullets])
+def _cautions(findings: OutcomeFindings, *, said: str) -> str:
+    """The cautions that hold, without what was ``said`` of the patient just before."""
+    texts = (one_line(caution_text(caution)) for caution in findings.cautions)
+    bullets = [_wrapped(text, "- ", INDENT) for text in texts if text not in said]
+    return "\n".join([labels.COLUMNS["cautions"], *bullets]) if bullets else ""
 
 
 def _wrapped(text: str, first: str = "", later: str | None = None) -> str:

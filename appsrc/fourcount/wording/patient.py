@@ -5,12 +5,13 @@ from __future__ import annotations
 from dataclasses import dataclass
 
 from fourcount.appraisal.drawn import other_side
-from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
+from fourcount.appraisal.findings import Caution, Figure, Gap, OutcomeFindings, PatientFindings
 from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import carried, limits, names, numbers, of_people
 from fourcount.wording.basis import basis
+from fourcount.wording.cautions import caution_text
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
 from fourcount.wording.headline import DO_NOT_ADD_UP
@@ -149,7 +150,7 @@ def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
     sentences = [carried.number_needed(patient.number_needed, named), _relative(named, patient.risk_ratio)]
     sentences += carried.reasons(patient)
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
-        sentences.append(f"The interval leaves out that {numbers.percent_given(patient.baseline)} is itself uncertain.")
+        sentences.append(caution_text(Caution(key="baseline-uncertain", facts={"baseline": patient.baseline})))
     if not _adds_up(patient, people):
         sentences.append(DO_NOT_ADD_UP)
     return " ".join(part for part in dict.fromkeys(sentences) if part)
