@@ -218,6 +218,7 @@ def test_a_narrow_terminal_encoding_loses_no_figure(monkeypatch: pytest.MonkeyPa
     [
         ("answer 1 2 3 4 >&-", 1, "There is no standard output to write to."),
         ("--help >&-", 1, "There is no standard output to write to."),
+        ("answer 1 2 3 4 <&- >/dev/null", 0, ""),
         ("answer 1 2 3 x 2>&-", 2, ""),
         ("answer 1 2 3 x 2>/dev/full", 2, ""),
     ],
