@@ -224,7 +224,7 @@ def test_less_than_one_person_is_not_one():
     ("interval", "denominator"),
     [
         (Interval(low=0.01, high=0.05), 100),
-        (Interval(low=-0.03, high=0.03), 100),
+        (Interval(low=-0.026, high=0.034), 100),
         (Interval(low=0.004, high=0.056), 1_000),
         (Interval(low=0.026, high=0.034), 1_000),
         (Range(low=0.004, high=Gap("beyond-one")), 1_000),
