@@ -59,6 +59,8 @@ class AsPrinted(QWidget):
         self.event_words.show_text(outcome.event_words_text)
         self.event_words.setPlaceholderText(self._event_hint(outcome))
         self.name.show_text(outcome.name_text)
+        left = outcome.counted == "left"
+        self._names["name_text"].show_words(labels.FIELDS["name_text" if left else "other_than"])
         self.welcome.show_choice("welcome" if outcome.welcome else "unwelcome")
         self.span.show_text(outcome.span_text)
         self.form.show_choice("events-of-total" if isinstance(outcome.table, EventsOfTotal) else "events-and-others")
@@ -90,8 +92,9 @@ class AsPrinted(QWidget):
         self._form_rows.setContentsMargins(0, 0, 0, 0)
         self._form_rows.setColumnStretch(1, 1)
         names = ("design", "name_text", "left_words_text", "span_text", "form")
-        for row, name in enumerate(names):
-            self._form_rows.addWidget(Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False), row, 0)
+        self._names = {name: Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False) for name in names}
+        for row, words in enumerate(self._names.values()):
+            self._form_rows.addWidget(words, row, 0)
         self._form_rows.addWidget(self.design, 0, 1, 1, 2)
         self._form_rows.addWidget(self.name, 1, 1)
         self._form_rows.addWidget(self.welcome, 1, 2)

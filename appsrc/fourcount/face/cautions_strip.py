@@ -51,7 +51,6 @@ class CautionsText(QWidget):
     def paintEvent(self, event: QPaintEvent) -> None:
         painter = QPainter(self)
         self._run(painter, self.width())
-        painter.fillRect(0, 0, self.width(), 1, self._look.colour("hairline"))
         if self._strip.hasFocus():
             painter.setPen(QPen(self._look.colour("accent"), 1, Qt.PenStyle.DotLine))
             painter.drawRect(self.rect().adjusted(1, 1, -2, -2))

@@ -12,8 +12,8 @@ from fourcount.face.session import Session
 from fourcount.ink.style import Style
 from fourcount.record import editing
 from fourcount.record.outcome import Design, Effect, EventsAndOthers, EventsOfTotal, Layout
-from fourcount.record.paper import Family, Record
-from fourcount.wording import labels
+from fourcount.record.paper import Choices, Family, Record
+from fourcount.wording import labels, numbers
 
 if TYPE_CHECKING:
     from fourcount.face.for_one_patient import PictureView
@@ -41,17 +41,20 @@ class Commands(QObject):
         """Begin with an empty record that keeps the choice of intervals; undo brings the last one back."""
         self._session.change_record(Record(choices=self._session.record.choices))
         self.cell_wanted.emit()
+        self.tell_unusual_choices()
 
     def open_example(self) -> None:
-        """Show the worked example under the same choice of intervals; undo brings the last record back."""
+        """Show the worked example with its own choice of intervals; undo brings the last record back."""
         from fourcount.wording.example import worked_example
 
-        self._session.change_record(editing.with_choices(worked_example(), self._session.record.choices))
+        self._session.change_record(worked_example())
         self.cell_wanted.emit()
 
     def swap_groups(self) -> None:
-        """Make the other group the index group."""
+        """Make the other group the index group; a typed starting risk stays, and now stands for the other group."""
         self._session.change_outcome(editing.swap_groups(self._session.outcome))
+        if self._session.outcome.patient.starting_risk_text.strip():
+            self.noticed.emit(labels.RISK_OF_OTHER_GROUP)
 
     def count_other_outcome(self) -> None:
         """Count the other column."""
@@ -116,6 +119,13 @@ class Commands(QObject):
         picture = self.picture.picture if self.picture else None
         self._tell("copy-picture", clipboard.copy_picture(self._session, picture, self._style))
 
+    def tell_unusual_choices(self) -> None:
+        """Say so where a new table begins with other intervals than those of a first start."""
+        choices = self._session.record.choices
+        if choices != Choices():
+            level = numbers.level(choices.level)
+            self.noticed.emit(labels.CHOICES_AS_LAST.format(family=labels.FAMILIES[choices.family], level=level))
+
     def _tell(self, key: str, done: bool) -> None:
         self.noticed.emit(labels.COPIED[key] if done else labels.NOTHING_TO_COPY)
 
@@ -123,7 +133,6 @@ class Commands(QObject):
         """Ask for any other level until it can be read or the question is put away."""
         from fourcount.record.entry.level import read_level
         from fourcount.record.entry.readings import Proportion, Unreadable
-        from fourcount.wording import numbers
         from fourcount.wording.gaps import mark_text
 
         now, problem = numbers.level(self._session.record.choices.level), ""

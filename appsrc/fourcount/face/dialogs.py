@@ -15,6 +15,10 @@ if TYPE_CHECKING:
     from fourcount.face.look import Look
 
 
+DIALOG_WIDTH = 360
+"""Wide enough for a dialog's title."""
+
+
 def may_discard(parent: QWidget) -> bool:
     """Ask whether what was typed may be lost."""
     from PySide6.QtWidgets import QMessageBox
@@ -32,11 +36,15 @@ def may_discard(parent: QWidget) -> bool:
 
 def ask_level(parent: QWidget, now: str, problem: str = "") -> str | None:
     """Ask for a confidence level, with what was wrong with the last answer; None if nothing was chosen."""
-    from PySide6.QtWidgets import QInputDialog, QLineEdit
+    from PySide6.QtWidgets import QInputDialog
 
     question = f"{problem}\n{labels.LEVEL_QUESTION}".strip()
-    text, accepted = QInputDialog.getText(parent, labels.LEVEL_TITLE, question, QLineEdit.EchoMode.Normal, now)
-    return text if accepted else None
+    dialog = QInputDialog(parent)
+    dialog.setWindowTitle(labels.LEVEL_TITLE)
+    dialog.setLabelText(question)
+    dialog.setTextValue(now)
+    dialog.setMinimumWidth(DIALOG_WIDTH)
+    return dialog.textValue() if dialog.exec() else None
 
 
 def methods_window(look: Look, parent: QWidget) -> HelpWindow:

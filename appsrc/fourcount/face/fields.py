@@ -173,6 +173,7 @@ class ChoiceField(QComboBox):
         for key, text in choices:
             self.addItem(text, key)
         self.setAccessibleName(name)
+        self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)  # not by the wheel
         self.setMinimumWidth(0)
         self.setSizeAdjustPolicy(QComboBox.SizeAdjustPolicy.AdjustToMinimumContentsLengthWithIcon)
         fixed = QSizePolicy.Policy.Fixed

@@ -129,6 +129,9 @@ class ForOnePatient(QWidget):
 
         view = patient_view(outcome, findings, choices, self._bars)
         self.baseline.setPlaceholderText(view.baseline_hint)
+        own = view.own_risk and not outcome.patient.starting_risk_text.strip()
+        hint = labels.OWN_RISK_SOURCE if own else labels.HINTS["starting_risk_source_text"]
+        self.source.setPlaceholderText(hint)
         self.effect.show_words(view.effect_words)
         self.effect.show_choice(view.effect)
         self.effect.setEnabled(view.effect_is_free)

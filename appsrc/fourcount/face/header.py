@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from PySide6.QtCore import Qt, Signal
+from PySide6.QtCore import Qt, QTimer, Signal
 from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QHBoxLayout, QSizePolicy, QWidget
 
@@ -12,6 +12,23 @@ from fourcount.face.look import Look
 from fourcount.face.text import Words
 from fourcount.record.paper import Record
 from fourcount.wording import labels
+
+NOTICE_STAYS = 6_000
+"""Milliseconds for which a notice stays."""
+
+
+class Hairline(QWidget):
+    """A thin line across the window, between two of its parts."""
+
+    def __init__(self, look: Look) -> None:
+        super().__init__()
+        self._look = look
+        self.setFixedHeight(1)
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        painter = QPainter(self)
+        painter.fillRect(self.rect(), self._look.colour("hairline"))
+        painter.end()
 
 
 class Header(QWidget):
@@ -32,7 +49,11 @@ class Header(QWidget):
             look, "title_text", labels.FIELDS["title_text"], labels.HINTS["title_text"], role="strong"
         )
         self.source = QuietField(look, "source_text", labels.FIELDS["source_text"], labels.HINTS["source_text"])
-        self.notice = Words(look, "body", "muted", wraps=False)
+        self.notice = Words(look, "body", "muted", " ", wraps=False)
+        self._timer = QTimer(self)
+        self._timer.setSingleShot(True)
+        self._timer.setInterval(NOTICE_STAYS)
+        self._timer.timeout.connect(self._on_notice_over)
         self.notice.setSizePolicy(QSizePolicy.Policy.Ignored, QSizePolicy.Policy.Preferred)
         self.notice.setAlignment(Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter)
         self._row = QHBoxLayout(self)
@@ -45,6 +66,15 @@ class Header(QWidget):
             field.left.connect(self.left)
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
+
+    def tell(self, notice: str) -> None:
+        """Show a notice for a while, in room that is kept for it."""
+        self.notice.setText(notice)
+        self.notice.setAccessibleName(notice)
+        self._timer.start()
+
+    def _on_notice_over(self) -> None:
+        self.notice.setText("")
 
     def show_state(self, record: Record) -> None:
         """Show the paper's own texts."""

@@ -14,6 +14,7 @@ from fourcount.ink.style import Role
 from fourcount.ink.typeset import CENTRE, LEFT, RIGHT, draw_text, text_height, text_width
 from fourcount.picture.scales import Scale
 from fourcount.wording.lines import MeasureLine
+from fourcount.wording.numbers import INFINITY
 
 ONE_LINE_FROM = 430
 """Below this width (at 100% text) estimate and interval stand under the name."""
@@ -38,6 +39,11 @@ def places(look: Look, width: float) -> Places:
     strip = width - strip_width
     estimate_right = width * 0.46
     return Places(width * 0.32, estimate_right, estimate_right + look.px(12), strip, strip_width, False)
+
+
+def _role(line: MeasureLine) -> Role:
+    """Figures are set large, words such as "not determined" are not."""
+    return "estimate" if any(mark.isdigit() or mark == INFINITY for mark in line.estimate) else "body"
 
 
 class ColumnHead(QWidget):
@@ -186,7 +192,7 @@ class MeasureRow(QAbstractButton):
             return at.strip + at.strip_width
         if at.narrow or line.withheld:
             return at.name
-        return at.estimate_right - text_width(line.estimate, self._look.font("estimate")) - self._look.px(10)
+        return at.estimate_right - text_width(line.estimate, self._look.font(_role(line))) - self._look.px(10)
 
     def _draw_withheld(
         self, painter: QPainter | None, line: MeasureLine, at: Places, top: float, name_height: float, width: float
@@ -203,6 +209,8 @@ class MeasureRow(QAbstractButton):
     ) -> float:
         look, colours = self._look, self._look.palette
         y = top + name_height + look.px(2)
+        if self._scale:
+            width = at.name
         tall = self._text(painter, 0, y, width, line.estimate, "estimate", colours.ink)
         after = text_width(line.estimate, look.font("estimate")) + look.px(12)
         if after + text_width(line.interval, look.font("body")) > width:
@@ -216,7 +224,7 @@ class MeasureRow(QAbstractButton):
         self, painter: QPainter | None, line: MeasureLine, at: Places, top: float, name_height: float, width: float
     ) -> float:
         look, colours = self._look, self._look.palette
-        font, body = look.font("estimate"), look.font("body")
+        font, body = look.font(_role(line)), look.font("body")
         tall = text_height(line.estimate, font, at.estimate_right) if line.estimate else 0.0
         room = (at.strip - look.px(8) if self._scale else width) - at.interval
         left = at.estimate_right - text_width(line.estimate, font) - 2

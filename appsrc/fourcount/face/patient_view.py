@@ -22,6 +22,7 @@ class PatientView(NamedTuple):
     """Everything that the column shows."""
 
     baseline_hint: str
+    own_risk: bool
     effect: str
     effect_words: dict[str, str]
     effect_is_free: bool
@@ -38,6 +39,7 @@ def patient_view(outcome: Outcome, findings: OutcomeFindings, choices: Choices, 
     marks = {mark.field: mark_text(mark) for mark in findings.marks}
     view = PatientView(
         baseline_hint=_baseline_hint(outcome, findings),
+        own_risk=outcome.design != "case-control",
         effect="odds_ratio" if outcome.design == "case-control" else outcome.patient.effect,
         effect_words=_effect_words(outcome, findings),
         effect_is_free=outcome.design != "case-control",
@@ -62,7 +64,8 @@ def _with_patient(
     words = patient_words(outcome, findings, choices, drawn.denominator if drawn else None)
     missing = labels.MISSING.format(names=", ".join(words.missing)) if words.missing else ""
     range_words = f"{sentence_case(words.summary)}." if words.summary else ""
-    detail = " ".join(part for part in (range_words, words.detail, WHICH_PEOPLE) if part)
+    which = WHICH_PEOPLE if drawn else ""
+    detail = " ".join(part for part in (range_words, words.detail, which) if part)
     lines = (words.basis, words.summary_bold, detail)
     picture = Picture(drawn, _picture_words(words, lines, drawn), bars) if drawn else None
     return view._replace(

@@ -18,7 +18,7 @@ from fourcount.face.columns import Page, PageScroll
 from fourcount.face.commands import Commands
 from fourcount.face.fields import TextField
 from fourcount.face.for_one_patient import ForOnePatient
-from fourcount.face.header import Banner, Header
+from fourcount.face.header import Banner, Hairline, Header
 from fourcount.face.later import Later
 from fourcount.face.look import APPEARANCES, Look
 from fourcount.face.session import Session
@@ -93,6 +93,7 @@ class MainWindow(QMainWindow):
         self.page = Page(self.look, (self.printed, self.says, self.patient))
         self.page_scroll = PageScroll(self.look, self.page)
         column.addWidget(self.page_scroll, 1)
+        column.addWidget(Hairline(self.look))
         column.addWidget(self.cautions)
         self.setCentralWidget(inside)
         self._on_look_changed()
@@ -131,6 +132,7 @@ class MainWindow(QMainWindow):
         """All wiring of the window, in one place."""
         for view in (self.header, self.printed, self.patient):
             view.edited.connect(self.session.edit_text)
+            view.edited.connect(self._on_edited)
             view.left.connect(self.session.end_run)
         do = self.commands
         self.printed.design.chosen.connect(do.choose_design)
@@ -142,7 +144,7 @@ class MainWindow(QMainWindow):
         self.says.level_chosen.connect(do.choose_level)
         self.patient.effect_chosen.connect(do.choose_effect)
         do.cell_wanted.connect(self._on_first_cell)
-        do.noticed.connect(self.header.notice.show_words)
+        do.noticed.connect(self.header.tell)
         self.session.changed.connect(self._show_state)
         self.session.focus_wanted.connect(self._on_focus_wanted)
         self._later.arrived.connect(self._on_figures_arrived)
@@ -173,7 +175,7 @@ class MainWindow(QMainWindow):
         outcome = self.session.outcome
         self.header.show_state(record)
         if record is not self._shown:
-            self.header.notice.show_words("")
+            self.header.tell("")
         self._shown = record
         self.printed.show_state(outcome, findings)
         self.says.show_state(record, outcome, findings)
@@ -233,9 +235,8 @@ class MainWindow(QMainWindow):
         """Whether the window holds typed text that is not just the worked example."""
         from fourcount.wording.example import worked_example
 
-        choices = self.session.record.choices
-        starts = (Record(choices=choices), editing.with_choices(worked_example(), choices))
-        return self.session.record not in starts
+        record = self.session.record
+        return editing.with_choices(record, Choices()) not in (Record(), worked_example())
 
     # Slots
 
@@ -245,6 +246,7 @@ class MainWindow(QMainWindow):
         self.setWindowIcon(QIcon(str(assets_folder() / "fourcount.png")))
         gc.enable()
         self.session.wake()
+        self.commands.tell_unusual_choices()
         self._later.load()
 
     def _on_libraries_loaded(self) -> None:
@@ -308,6 +310,9 @@ class MainWindow(QMainWindow):
             menu.setFont(self.look.font("body"))
         self.update()
         QTimer.singleShot(0, self._show_focus)
+
+    def _on_edited(self, _field: str, _text: str) -> None:
+        self._show_focus()
 
     def _on_focus_changed(self, _before: QWidget | None, _now: QWidget | None) -> None:
         self._show_focus()

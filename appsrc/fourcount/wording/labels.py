@@ -9,6 +9,7 @@ FIELDS = {
     "source_text": "Where the numbers stand",
     "design": "Study",
     "name_text": "Outcome",
+    "other_than": "Other than",
     "left_words_text": "People who",
     "welcome": "Event is welcome or not",
     "span_text": "Time span",
@@ -121,10 +122,13 @@ LINK_WORDS = {
 
 COPIED = {
     "copy-text": "Copied as text.",
-    "copy-table": "Copied as a table: paste it into a spreadsheet or a letter.",
+    "copy-table": "Copied as a table.",
     "copy-picture": "Copied as a picture.",
 }
-NOTHING_TO_COPY = "There is nothing to copy yet: type the four counts first."
+NOTHING_TO_COPY = "Nothing copied: the table is not whole."
+RISK_OF_OTHER_GROUP = "The starting risk now stands for the other group."
+CHOICES_AS_LAST = "Intervals as last used: {family}, {level}."
+OWN_RISK_SOURCE = "this study’s reference group"
 
 CLOSE_TITLE = "Close Fourcount?"
 CLOSE_QUESTION = (
