@@ -80,14 +80,16 @@ def test_observational_designs(facts, design):
 
 
 def test_converted_limits_with_a_typed_risk(facts):
-    """The odds ratio's limits are converted at a risk that is taken as certain."""
-    assert facts(*TABLE, baseline="12%")["converted-limits"] == [{"baseline": 0.12}]
-    assert "converted-limits" not in facts(*TABLE)
+    """The odds ratio is carried, and its limits are converted at a risk that is taken as certain."""
+    assert facts(*TABLE, baseline="12%", effect="odds_ratio")["converted-limits"] == [{"baseline": 0.12}]
+    assert facts(*TABLE, baseline="12%", design="case-control")["converted-limits"] == [{"baseline": 0.12}]
+    assert "converted-limits" not in facts(*TABLE, baseline="12%")
+    assert "converted-limits" not in facts(*TABLE, effect="odds_ratio")
 
 
 def test_converted_limits_not_without_limits(facts):
     """An odds ratio without an interval has no limits to convert."""
-    assert "converted-limits" not in facts(0, 0, 8, 5, baseline="12%")
+    assert "converted-limits" not in facts(0, 0, 8, 5, baseline="12%", effect="odds_ratio")
 
 
 @pytest.mark.parametrize(

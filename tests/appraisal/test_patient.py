@@ -8,7 +8,6 @@ import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
-from fourcount.appraisal.drawn import other_side
 from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, NumberNeededRange, Range
 from fourcount.appraisal.gating import SUPPORT
 from fourcount.appraisal.patient import carry
@@ -244,31 +243,3 @@ def test_the_number_needed_is_of_the_patients_own_difference(appraised):
     assert math.isclose(-1 / patient.difference.estimate, patient.number_needed.estimate, rel_tol=1e-12)
     assert math.isclose(-1 / patient.difference.interval.low, patient.number_needed.low.value, rel_tol=1e-12)
     assert math.isclose(-1 / patient.difference.interval.high, patient.number_needed.high.value, rel_tol=1e-12)
-
-
-def test_the_other_side_of_an_outcome_has_its_limits_turned():
-    """A recovery of 80% with an upper limit past 100% is 20% without recovery: the withheld end is the lower one."""
-    own = at(0.4, "risk_ratio", 2.0, 1.5, 3.0, welcome=True)
-    assert own.with_.interval == Range(low=pytest.approx(0.6), high=Gap("beyond-one"))
-    other = other_side(own)
-    assert (other.baseline, other.without.estimate) == (0.6, 0.6)
-    assert other.without.interval == Gap("bare-starting-risk")
-    assert other.with_.estimate == pytest.approx(0.2)
-    assert other.with_.interval == Range(low=Gap("beyond-one"), high=pytest.approx(0.4))
-    assert other.difference.estimate == -own.difference.estimate
-    assert other.difference.interval == Range(low=Gap("beyond-one"), high=pytest.approx(-0.2))
-    assert (other.number_needed, other.risk_ratio, other.carried) == (own.number_needed, own.risk_ratio, own.carried)
-
-
-def test_the_other_side_of_a_range_without_a_lower_limit_has_no_upper_one():
-    """Turned once more it is itself again."""
-    own = at(0.4, "risk_ratio", 2.0, 1.5, 3.0)
-    again = other_side(other_side(own)).with_.interval
-    assert again == Range(low=pytest.approx(own.with_.interval.low), high=Gap("beyond-one"))
-
-
-def test_the_other_side_of_no_effect_is_no_effect_without_a_sign():
-    """Limits that are both there make an interval, and 0 stays 0."""
-    turned = other_side(at(0.4, "risk_ratio", 1.0, 0.75, 1.0)).difference
-    assert turned.interval == Interval(low=0.0, high=pytest.approx(0.1))
-    assert [math.copysign(1.0, x) for x in (turned.estimate, turned.interval.low)] == [1.0, 1.0]

@@ -35,7 +35,7 @@ def test_a_wrong_count_is_kept_marked_and_explained(example: Hands, typed: str, 
     assert example.notes == [sentence]
     assert cells[CELLS[0]].accessibleDescription() == sentence
     assert example.rows == {}
-    assert example.sentence == "A cell of the table cannot be used; the mark beside it says why."
+    assert example.sentence == "A cell of the table cannot be used; the line under the table says why."
     assert not example.window.patient.picture.isVisible()
 
 

@@ -115,7 +115,7 @@ def test_a_refusal_says_what_would_do():
         "38, 374": "38, 374: one count in each cell",
         "38\t374": "38 374: one count in each cell",
     }
-    assert gaps.gap_text(Gap("unreadable")) == "A cell of the table cannot be used; the mark beside it says why."
+    assert gaps.gap_text(Gap("unreadable")) == "A cell of the table cannot be used; the line under the table says why."
 
 
 def test_a_count_in_two_parts_says_how_it_is_read():
@@ -150,7 +150,12 @@ def test_a_caution_without_its_facts_is_still_a_sentence(key):
 def test_a_caution_says_the_numbers_it_is_about():
     """The risk ratio kept constant names both risks."""
     text = cautions.caution_text(Caution(key="effect-kept-constant", facts=FACTS))
-    assert text == "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%."
+    assert text == (
+        "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%; keeping that of the other "
+        "outcome the same instead would give other figures."
+    )
+    by_odds = cautions.caution_text(Caution(key="effect-kept-constant", facts={**FACTS, "effect": "odds_ratio"}))
+    assert by_odds == "The odds ratio is assumed to be the same at 12% as at the study’s own 17.1%."
 
 
 def test_a_case_control_study_rests_on_two_assumptions():

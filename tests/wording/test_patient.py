@@ -146,22 +146,24 @@ def test_what_is_not_named_yet_is_listed(findings_of, outcome_of):
     assert words.without_title == "Without: reference group"
 
 
-def test_of_a_welcome_event_the_other_outcome_is_drawn(outcome_of, findings_of):
-    """Icons always stand for the unwelcome outcome, so that pictures of one page can be compared."""
+def test_a_welcome_event_is_drawn_as_it_is_counted(outcome_of, findings_of):
+    """Picture, sentence and rows count the same people; fewer of a good event are lost, not avoided."""
     words = words_of(outcome_of(left_welcome=True, name_text="Recovery"), findings_of)
-    assert (words.without_count, words.with_count) == ("83 in 100", "91 in 100")
-    assert (words.key_event, words.key_other) == ("did not fall", "fell")
-    assert (words.key_avoided, words.key_added) == ("", "added, on balance")
-    assert (words.without_percent, words.with_percent) == ("83% did not fall", "91% did not fall")
+    assert (words.without_count, words.with_count) == ("17 in 100", "9 in 100")
+    assert (words.key_event, words.key_other) == ("fell", "did not fall")
+    assert (words.key_avoided, words.key_added) == ("recovery lost, on balance", "")
     assert words.summary_bold == "8 fewer in 100 fell at least once"
-    assert words.summary == "over 12 months, 95% interval 3 to 13"
-    assert words.picture_sentence.endswith(
-        "91 (91%) did not fall and 9 fell at least once: 8 fewer in 100 fell at least once, 95% interval 3 to 13. "
-        "We cannot say which people."
-    )
-    assert words.scale == "Drawn: people with the unwelcome outcome."
+    assert words.scale == "Filled: people with the welcome outcome."
     assert words.detail.startswith("NNTH at this starting risk 13")
-    assert "The welcome outcome itself is, in relative words, 46% lower" in words.detail
+    assert "In relative words 46% lower" in words.detail
+
+
+def test_where_the_other_outcome_is_counted_the_name_is_not_its_own(outcome_of, findings_of):
+    """ "Falls" names the left column: the key leaves it out, and what travels says so."""
+    outcome = outcome_of(counted="right")
+    words = words_of(outcome, findings_of)
+    assert (words.key_added, words.key_avoided) == ("gained, on balance", "")
+    assert picture_heading(Record(outcomes=(outcome,)), outcome) == "Other than falls"
 
 
 def test_a_welcome_event_alone_has_to_be_named(outcome_of, findings_of):
@@ -170,7 +172,7 @@ def test_a_welcome_event_alone_has_to_be_named(outcome_of, findings_of):
     words = words_of(outcome_of((60, 40, 51, 49), left_welcome=True, **named), findings_of)
     assert words.missing == ()
     assert words.summary_bold == "9 more in 100 healed"
-    assert (words.without_percent, words.without_other) == ("49% did not have the outcome “healed”", "51 healed")
+    assert (words.without_percent, words.without_other) == ("51%", "49 did not")
 
 
 @pytest.mark.parametrize("welcome", [True, False])
@@ -258,13 +260,12 @@ def test_headline_and_patient_speak_of_the_same_people(outcome_of, findings_of, 
     event = re.search(r"about [\d,]+ (.*?) within", headline(outcome, findings, Choices()))[1]
     assert COLUMNS_OF_WORDS[event] == counted
     assert words.summary_bold.endswith(f" {event}")
-    drawn = "right" if welcome else "left"
-    assert COLUMNS_OF_WORDS[words.key_event] == drawn
-    assert COLUMNS_OF_WORDS[words.key_other] != drawn
+    assert COLUMNS_OF_WORDS[words.key_event] == counted
+    assert COLUMNS_OF_WORDS[words.key_other] != counted
     first = re.match(r"Of 1,000 people with usual care ([\d,]+) \(.*?\) (.*?) within", words.picture_sentence)
     n, said = first.groups()
-    assert COLUMNS_OF_WORDS[said] == drawn
-    share = counts[2 if drawn == "left" else 3] / (counts[2] + counts[3])
+    assert COLUMNS_OF_WORDS[said] == counted
+    share = counts[2 if counted == "left" else 3] / (counts[2] + counts[3])
     assert int(n) == pytest.approx(1_000 * share, abs=0.51)
 
 

@@ -104,8 +104,10 @@ def observational(case: Case) -> Facts | None:
 
 
 def converted_limits(case: Case) -> Facts | None:
-    """The odds ratio's limits were converted at a given starting risk."""
+    """The odds ratio is carried, and its limits were converted at a given starting risk."""
     conversion = case.conversion
+    if case.carried is None or case.carried.effect != "odds_ratio":
+        return None
     if isinstance(conversion, Gap) or conversion.baseline_from != "given":
         return None
     if isinstance(conversion.risk_ratio.interval, Gap):

@@ -15,7 +15,6 @@ from fourcount.wording.axis import axis_words
 from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.names import effect_name, sentence_case
 from fourcount.wording.patient import WHICH_PEOPLE, PatientWords, patient_words
-from fourcount.wording.patient import drawn as what_is_drawn
 
 
 class PatientView(NamedTuple):
@@ -60,7 +59,7 @@ def _with_patient(
     choices: Choices,
     bars: bool,
 ) -> PatientView:
-    drawn = _plan(outcome, patient)
+    drawn = _plan(patient)
     words = patient_words(outcome, findings, choices, drawn.denominator if drawn else None)
     missing = labels.MISSING.format(names=", ".join(words.missing)) if words.missing else ""
     range_words = f"{sentence_case(words.summary)}." if words.summary else ""
@@ -76,8 +75,7 @@ def _with_patient(
     )
 
 
-def _plan(outcome: Outcome, patient: PatientFindings) -> Plan | None:
-    _, patient = what_is_drawn(outcome, patient)
+def _plan(patient: PatientFindings) -> Plan | None:
     without, with_ = patient.without.estimate, patient.with_.estimate
     if isinstance(without, Gap) or isinstance(with_, Gap):
         return None

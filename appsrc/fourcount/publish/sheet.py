@@ -42,7 +42,7 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
     """
     choices = record.choices
     cautions = [caution_text(caution) for caution in findings.cautions]
-    about = (outcome.name_text, record.title_text, record.source_text)
+    about = (names.outcome_name(outcome), record.title_text, record.source_text)
     table = (
         exports.SHEET_HEAD,
         *(_text(text) for text in about if text.strip()),

@@ -105,6 +105,10 @@ TEXTS = {
 HALF_ADDED_TO_A_RATIO = (
     f"Because of a count of 0, the textbook interval of the {{measure}} is that with {WALTER}. {PLAIN_ESTIMATE}"
 )
+RATIO_KEPT_CONSTANT = (
+    "The {effect} is assumed to be the same at {baseline} as at the study’s own {study}; keeping that of the other "
+    "outcome the same instead would give other figures."
+)
 UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
 SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or infinity are shown as they are."
 
@@ -115,6 +119,8 @@ def caution_text(caution: Caution) -> str:
         return told(SEVERAL_ZEROS, caution.facts)
     if caution.key == "half-added" and caution.facts.get("measure") == "risk_ratio":
         return told(HALF_ADDED_TO_A_RATIO, caution.facts)
+    if caution.key == "effect-kept-constant" and caution.facts.get("effect") != "odds_ratio":
+        return told(RATIO_KEPT_CONSTANT, caution.facts)
     return told(TEXTS.get(caution.key, UNKNOWN)[1], caution.facts)
 
 

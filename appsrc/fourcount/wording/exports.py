@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 MADE_WITH = "Calculated with Fourcount {version} on {date}; {family} intervals at {level}."
+NOT_ALL_EXACT = "The difference, the number needed and the risk ratio have score intervals, for want of exact ones."
 
 SHEET_HEAD = ("measure", "estimate", "low", "high", "method")
 SHEET_INFINITY = "infinity"

@@ -21,7 +21,7 @@ GAP_TEXTS = {
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     # the design, the table, the patient
     "not-typed": "Type the four counts of the table.",
-    "unreadable": "A cell of the table cannot be used; the mark beside it says why.",
+    "unreadable": "A cell of the table cannot be used; the line under the table says why.",
     "follows": "This figure takes a moment and will follow.",
     "design-survey-nnt": "A cross-sectional survey sees who has the event at one time, not who comes to have it, "
     "so it gives no number needed to treat.",

@@ -65,6 +65,12 @@ def in_group(outcome: Outcome, group: Group) -> str:
     return f"in the group “{label(outcome, group)}”"
 
 
+def outcome_name(outcome: Outcome) -> str:
+    """The outcome's name, which is the left column's; where the right one is counted, it says so."""
+    name = outcome.name_text.strip()
+    return name if not name or outcome.counted == "left" else f"Other than {mid_sentence(name)}"
+
+
 def event_words(outcome: Outcome) -> str:
     """The counted event as the reader's sentence says it: "fell at least once"."""
     words, heading = bare(outcome.event_words_text), bare(outcome.event_heading_text)

@@ -4,9 +4,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from fourcount.appraisal.drawn import other_side
 from fourcount.appraisal.findings import Caution, Figure, Gap, OutcomeFindings, PatientFindings
-from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import carried, limits, names, numbers, of_people
@@ -18,7 +16,7 @@ from fourcount.wording.headline import DO_NOT_ADD_UP
 
 LONGEST_KEY = 40
 TOO_SMALL = "too small to draw"
-UNWELCOME_DRAWN = "Drawn: people with the unwelcome outcome."
+WELCOME_DRAWN = "Filled: people with the welcome outcome."
 WHICH_PEOPLE = "We cannot say which people."
 
 
@@ -63,42 +61,35 @@ def patient_words(
         return PatientWords(
             without_title=without_title, with_title=with_title, detail=gap_text(patient), missing=missing(outcome)
         )
-    named, own = outcome, patient
-    outcome, patient = drawn(outcome, patient)
     people = denominator or carried.denominator_for_text(patient)
     change = patient.difference.estimate
     return PatientWords(
         without_title=without_title,
         with_title=with_title,
         without_count=carried.count(patient.without, people),
-        without_percent=_percent_said(patient.without, people, named),
+        without_percent=carried.percentage(patient.without, people),
         with_count=carried.count(patient.with_, people),
-        with_percent=_percent_said(patient.with_, people, named),
+        with_percent=carried.percentage(patient.with_, people),
         without_other=_others(patient.without, people, outcome),
         with_other=_others(patient.with_, people, outcome),
         key_event=names.event_key(outcome),
-        key_avoided=_key("avoided", named) if not isinstance(change, Gap) and change < 0 else "",
-        key_added=_key("added", named) if not isinstance(change, Gap) and change > 0 else "",
+        key_avoided=_key("avoided", outcome) if not isinstance(change, Gap) and change < 0 else "",
+        key_added=_key("added", outcome) if not isinstance(change, Gap) and change > 0 else "",
         key_other=names.other_key(outcome),
-        summary_bold=_change_said(named, own.difference, people),
-        summary=_summary(named, own, choices, people),
-        detail=_detail(named, own, people),
-        basis=basis(named, own),
-        scale="" if isinstance(change, Gap) else _scale(named, denominator),
-        missing=missing(named),
-        picture_sentence=_picture_sentence(outcome, patient, people) + _change_sentence(named, own, choices, people),
+        summary_bold=_change_said(outcome, patient.difference, people),
+        summary=_summary(outcome, patient, choices, people),
+        detail=_detail(outcome, patient, people),
+        basis=basis(outcome, patient),
+        scale="" if isinstance(change, Gap) else _scale(outcome, denominator),
+        missing=missing(outcome),
+        picture_sentence=_picture_sentence(outcome, patient, people) + _change_sentence(patient, choices, people),
     )
 
 
 def picture_heading(record: Record, outcome: Outcome) -> str:
     """What a picture that travels by itself is about: the outcome's name, the paper's title and where it stands."""
-    parts = (outcome.name_text, record.title_text, record.source_text)
+    parts = (names.outcome_name(outcome), record.title_text, record.source_text)
     return " · ".join(text.strip() for text in parts if text.strip())
-
-
-def drawn(outcome: Outcome, patient: PatientFindings) -> tuple[Outcome, PatientFindings]:
-    """The outcome and the risks as a picture draws them: always those of the unwelcome outcome."""
-    return (count_other_outcome(outcome), other_side(patient)) if outcome.welcome else (outcome, patient)
 
 
 def missing(outcome: Outcome) -> tuple[str, ...]:
@@ -112,12 +103,6 @@ def missing(outcome: Outcome) -> tuple[str, ...]:
     return tuple(name for name, text in wanted.items() if not text)
 
 
-def _percent_said(figure: Figure, people: int, named: Outcome) -> str:
-    """The percentage; of a welcome event it says what it counts, since the sentence beside it counts the other side."""
-    percent = carried.percentage(figure, people)
-    return f"{percent} {names.event_words(count_other_outcome(named))}" if percent and named.welcome else percent
-
-
 def _others(figure: Figure, people: int, outcome: Outcome) -> str:
     """The other frame: ``88 did not fall``. It is what the rounded count leaves, so that the two make the whole."""
     if isinstance(figure.estimate, Gap):
@@ -126,7 +111,9 @@ def _others(figure: Figure, people: int, outcome: Outcome) -> str:
 
 
 def _key(verb: str, outcome: Outcome) -> str:
-    name = "" if outcome.welcome else names.mid_sentence(outcome.name_text.strip())
+    if outcome.welcome:
+        verb = {"avoided": "lost", "added": "gained"}[verb]
+    name = names.mid_sentence(outcome.name_text.strip()) if outcome.counted == "left" else ""
     return f"{name} {verb}, on balance" if name and len(name) <= LONGEST_KEY else f"{verb}, on balance"
 
 
@@ -147,7 +134,7 @@ def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
     """What stands under the summary: number needed, relative words, and what the interval leaves out."""
     if isinstance(patient.with_.estimate, Gap):
         return carried.reason(patient.with_.estimate, patient)
-    sentences = [carried.number_needed(patient.number_needed, named), _relative(named, patient.risk_ratio)]
+    sentences = [carried.number_needed(patient.number_needed, named), _relative(patient.risk_ratio)]
     sentences += carried.reasons(patient)
     if patient.range_from == "effect" and not isinstance(patient.difference.interval, Gap):
         sentences.append(caution_text(Caution(key="baseline-uncertain", facts={"baseline": patient.baseline})))
@@ -156,7 +143,7 @@ def _detail(named: Outcome, patient: PatientFindings, people: int) -> str:
     return " ".join(part for part in dict.fromkeys(sentences) if part)
 
 
-def _relative(named: Outcome, ratio: Figure) -> str:
+def _relative(ratio: Figure) -> str:
     if isinstance(ratio.estimate, Gap):
         return ""
     change = ratio.estimate - 1
@@ -164,10 +151,6 @@ def _relative(named: Outcome, ratio: Figure) -> str:
         return ""
     word = limits.LOWER if change < 0 else limits.HIGHER
     interval = "" if half_added(ratio) else limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
-    if named.welcome:
-        return (
-            f"The welcome outcome itself is, in relative words, {numbers.percent_whole(abs(change))} {word}{interval}."
-        )
     return f"In relative words {numbers.percent_whole(abs(change))} {word}{interval}."
 
 
@@ -179,7 +162,7 @@ def _adds_up(patient: PatientFindings, people: int) -> bool:
 
 def _scale(named: Outcome, denominator: int | None) -> str:
     """What has to be said of the picture itself: what it counts, how many people it shows, or why it shows none."""
-    parts = [UNWELCOME_DRAWN] if named.welcome else []
+    parts = [WELCOME_DRAWN] if named.welcome else []
     if denominator is None:
         parts.append(f"{TOO_SMALL[0].upper()}{TOO_SMALL[1:]} as people.")
     elif denominator != 100:
@@ -205,11 +188,11 @@ def _picture_sentence(outcome: Outcome, patient: PatientFindings, people: int) -
     return f"{first}; {second}"
 
 
-def _change_sentence(named: Outcome, own: PatientFindings, choices: Choices, people: int) -> str:
+def _change_sentence(own: PatientFindings, choices: Choices, people: int) -> str:
     """How the picture's sentence ends: the change of the named outcome, and its interval."""
     if isinstance(own.with_.estimate, Gap):
         return ""
-    change = _change_said(named, own.difference, people) if named.welcome else carried.change(own.difference, people)
+    change = carried.change(own.difference, people)
     interval = carried.interval(own, choices, people)
     return f": {change[:1].lower()}{change[1:]}{f', {interval}' if interval else ''}. {WHICH_PEOPLE}"
 

@@ -25,7 +25,7 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
     )
     index = names.in_group(outcome, "index")
     if isinstance(patient.with_.estimate, Gap):
-        return f"{first}. {names.sentence_case(index)}: {carried.reason(patient.with_.estimate, patient)}"
+        return f"{first}. {carried.reason(patient.with_.estimate, patient)}"
     second = f"of {numbers.whole(people)} {index} {_people(patient.with_.estimate, people)}"
     change, interval = carried.change(patient.difference, people), carried.interval(patient, choices, people)
     said = f"{first}, {second}: {change[:1].lower()}{change[1:]}{f' ({interval})' if interval else ''}"

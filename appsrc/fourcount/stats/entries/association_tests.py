@@ -27,7 +27,7 @@ ASSOCIATION_TESTS = (
         key="fisher",
         title="Fisher exact",
         formula="The sum of the probabilities, given the margins, of all tables no likelier than this one",
-        source="Fisher 1935, J R Stat Soc 98:39 (volume and page from memory)",
+        source="Fisher 1935",
         note="Never too small, and usually too large.",
         p=_fisher,
     ),
@@ -43,7 +43,7 @@ ASSOCIATION_TESTS = (
         key="pearson",
         title="Pearson chi-square",
         formula="N(ad − bc)² / (n1 n2 m (N−m)), one degree of freedom, no continuity correction",
-        source="K. Pearson 1900, Philos Mag 50:157 (volume and page from memory)",
+        source="K. Pearson 1900",
         note="Where everybody had the event, or nobody, there is nothing to test.",
         p=association.pearson,
     ),
@@ -51,7 +51,7 @@ ASSOCIATION_TESTS = (
         key="n-minus-1",
         title="(N−1) chi-square",
         formula="(N−1)(ad − bc)² / (n1 n2 m (N−m)), one degree of freedom, no continuity correction",
-        source="E. S. Pearson 1947, Biometrika 34:139; Campbell 2007, Stat Med 26:3661 (volumes and pages from memory)",
+        source="E. S. Pearson 1947; Campbell 2007",
         note=(
             "Agrees with the Miettinen–Nurminen intervals about no effect. "
             "Where everybody had the event, or nobody, there is nothing to test."

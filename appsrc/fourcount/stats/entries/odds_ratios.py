@@ -44,7 +44,7 @@ ODDS_RATIO_METHODS = (
         interval=_conditional_exact,
         title="Conditional exact (Cornfield, Fisher)",
         formula="Lower: P(A ≥ a | margins) = alpha/2; upper: P(A ≤ a | margins) = alpha/2; A noncentral hypergeometric",
-        source="Cornfield 1956, Proc Third Berkeley Symp 4:135; Fisher 1935, J R Stat Soc 98:39 (from memory)",
+        source="Cornfield 1956; Fisher 1935",
         note="Covers the true odds ratio at least as often as its level says, and usually more often, so it is wide.",
     ),
     Method(
@@ -80,7 +80,7 @@ ODDS_RATIO_METHODS = (
         interval=odds.woolf,
         title="Woolf logit",
         formula="(ad/bc) exp(∓ z √(1/a + 1/b + 1/c + 1/d))",
-        source="Woolf 1955, Ann Hum Genet 19:251 (volume and page from memory); at a count of 0 Gart 1966",
+        source="Woolf 1955; at a count of 0 Gart 1966",
         note="With a count of 0 it does not exist: Gart’s takes its place, which adds 1/2 to all four counts.",
     ),
     Method(

@@ -62,7 +62,7 @@ RISK_METHODS = (
         interval=risk.logit,
         title="Logit",
         formula="The odds o = x/(n−x) with limits o exp(∓ z √(1/x + 1/(n−x))), each turned into the risk o/(1+o)",
-        source="Woolf 1955, the part of one group; Newcombe 2001, Am Stat 55:200, from memory",
+        source="Woolf 1955, the part of one group",
         note="The textbook interval of odds. At 0 or n events it does not exist, so none is given.",
     ),
     Method(
