@@ -16,8 +16,8 @@ from fourcount.wording import labels
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
 
-SAID_BESIDE = ("baseline-uncertain", "percent-disagrees", "read-as")
-"""Cautions that stand in full beside the figure or the cell they concern."""
+SAID_AT_THE_CELL = ("percent-disagrees", "read-as")
+"""Cautions that stand in full under the table."""
 
 HIGHEST_SHARE = 0.24
 """The largest share of the window's height that the strip takes before it scrolls."""
@@ -109,9 +109,10 @@ class CautionsStrip(QScrollArea):
         """Show a line for each caution that holds."""
         texts: tuple[str, ...] = ()
         if findings and findings.cautions:
-            from fourcount.wording.cautions import caution_text
+            from fourcount.wording.cautions import SAID_OF_THE_PATIENT, caution_text
 
-            texts = tuple(caution_text(c) for c in findings.cautions if c.key not in SAID_BESIDE)
+            said = (*SAID_AT_THE_CELL, *SAID_OF_THE_PATIENT)
+            texts = tuple(caution_text(c) for c in findings.cautions if c.key not in said)
         if texts != self._inside.texts:
             self._inside.texts = texts
             self.setAccessibleDescription(" ".join((*texts, self._standing)))

@@ -16,10 +16,6 @@ if TYPE_CHECKING:
     from fourcount.ink.picture import Picture
 
 
-SAID = "baseline-uncertain"
-"""The caution that the picture's own lines say already."""
-
-
 def copy_text(session: Session) -> bool:
     """Put the findings as plain text on the clipboard; False while there are none."""
     from fourcount.publish.prose import prose
@@ -47,7 +43,8 @@ def copy_table(session: Session) -> bool:
 def copy_picture(session: Session, picture: Picture | None, style: Style) -> bool:
     """Put the picture on the clipboard, with its sentences and cautions in it; False while there is none."""
     from fourcount.ink.picture import as_image
-    from fourcount.wording.cautions import caution_text
+    from fourcount.wording.cautions import SAID_OF_THE_PATIENT, caution_text
+    from fourcount.wording.exports import PICTURE_FOOT
     from fourcount.wording.patient import picture_heading
     from fourcount.wording.standing import STANDING
 
@@ -55,11 +52,11 @@ def copy_picture(session: Session, picture: Picture | None, style: Style) -> boo
         return False
     heading = picture_heading(session.record, session.outcome)
     cautions = (
-        [caution_text(caution) for caution in session.findings.cautions if caution.key != SAID]
+        [caution_text(caution) for caution in session.findings.cautions if caution.key not in SAID_OF_THE_PATIENT]
         if session.findings
         else []
     )
-    foot = [*cautions, f"{STANDING} Fourcount {__version__}, {date.today():%Y-%m-%d}"]
+    foot = [*cautions, PICTURE_FOOT.format(standing=STANDING, version=__version__, date=date.today().isoformat())]
     QGuiApplication.clipboard().setImage(as_image(picture, style, heading, "\n".join(foot)))
     return True
 

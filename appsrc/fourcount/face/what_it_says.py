@@ -142,10 +142,9 @@ class WhatItSays(QWidget):
             row.show()
         self._put_in_order([line.key for line in lines])
         if self._head and self._shown:
-            from fourcount.wording import numbers
+            from fourcount.wording.limits import interval_name
 
-            level = numbers.level(self._shown[2].level)
-            self._head.show_words(labels.INTERVAL_HEAD.format(level=level) if len(lines) > 1 else "")
+            self._head.show_words(interval_name(self._shown[2].level) if len(lines) > 1 else "")
         if self._open in shown and not self.working.isHidden():
             self._working_timer.start()  # while somebody types, an open working follows at the next pause
         else:

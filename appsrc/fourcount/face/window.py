@@ -79,7 +79,7 @@ class MainWindow(QMainWindow):
         self.printed.grid.cells[CELLS[0]].setFocus()
 
     def _build(self) -> None:
-        self.setWindowTitle("Fourcount")
+        self.setWindowTitle(labels.WINDOW_TITLE)
         self.setMinimumSize(SMALLEST_SIZE)
         self.resize(FIRST_SIZE.boundedTo(self.screen().availableSize() - ROOM_FOR_A_FRAME))
         self.menus = commands_table.fill_menus(self, self.actions_by_key)
@@ -184,7 +184,7 @@ class MainWindow(QMainWindow):
         self.actions_by_key["undo"].setEnabled(self.session.can_undo)
         self.actions_by_key["redo"].setEnabled(self.session.can_redo)
         title = record.title_text.strip()
-        self.setWindowTitle(f"{title} · Fourcount" if title else "Fourcount")
+        self.setWindowTitle(labels.TITLED_WINDOW.format(title=title) if title else labels.WINDOW_TITLE)
         self._ask_for_the_rest()
 
     def _ask_for_the_rest(self) -> None:

@@ -7,7 +7,7 @@ from fourcount.wording.facts import told
 from fourcount.wording.half_added import GART, WALTER
 from fourcount.wording.standing import STANDING, STANDING_FULL
 
-__all__ = ["STANDING", "STANDING_FULL", "TEXTS", "caution_text", "caution_title"]
+__all__ = ["SAID_OF_THE_PATIENT", "STANDING", "STANDING_FULL", "TEXTS", "caution_text", "caution_title"]
 
 PLAIN_ESTIMATE = (
     "The estimate stays as it is; the interval is centred on the altered one and need not hold an estimate of 0 or "
@@ -109,6 +109,9 @@ RATIO_KEPT_CONSTANT = (
     "The {effect} is assumed to be the same at {baseline} as at the study’s own {study}; keeping that of the other "
     "outcome the same instead would give other figures."
 )
+SAID_OF_THE_PATIENT = ("baseline-uncertain",)
+"""The cautions that the patient's own words say already, wherever both stand together."""
+
 UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
 SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or infinity are shown as they are."
 

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+PICTURE_FOOT = "{standing} Fourcount {version}, {date}"
 MADE_WITH = "Calculated with Fourcount {version} on {date}; {family} intervals at {level}."
 NOT_ALL_EXACT = "The difference, the number needed and the risk ratio have score intervals, for want of exact ones."
 

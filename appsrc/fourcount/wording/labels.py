@@ -72,6 +72,8 @@ CELL_NAMES = {
 }
 
 INTERVAL_HEAD = "{level} interval"
+WINDOW_TITLE = "Fourcount"
+TITLED_WINDOW = "{title} · Fourcount"
 FIRST_STEP = "New here? See an invented example"
 PATIENT_WAITS = "The picture appears once the four counts are there."
 BASELINE_HINT = "{percent}"
