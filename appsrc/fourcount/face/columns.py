@@ -7,8 +7,9 @@ from typing import NamedTuple
 
 from PySide6.QtCore import QRect, QSize, Qt
 from PySide6.QtGui import QPainter, QPaintEvent
-from PySide6.QtWidgets import QFrame, QLayout, QLayoutItem, QScrollArea, QWidget
+from PySide6.QtWidgets import QFrame, QScrollArea, QWidget
 
+from fourcount.face.item_layout import ItemLayout
 from fourcount.face.look import Look
 from fourcount.face.scroll_bar import ScrollBar
 
@@ -29,13 +30,11 @@ TWO = Arrangement(((0, 2), (1,)), (430, 560))
 ONE = Arrangement(((0, 1, 2),), (1,))
 
 
-class ColumnsLayout(QLayout):
+class ColumnsLayout(ItemLayout):
     """Three items in pillars; each is as tall as its width asks for, and the last of a pillar takes the rest."""
 
     def __init__(self, look: Look, parent: QWidget) -> None:
-        super().__init__(parent)
-        self._look = look
-        self._items: list[QLayoutItem] = []
+        super().__init__(look, parent)
         self._measured: dict[tuple[int, float], list[list[tuple[int, int]]]] = {}
         self.setContentsMargins(0, 0, 0, 0)
 
@@ -44,26 +43,8 @@ class ColumnsLayout(QLayout):
         room = width / self._look.zoom
         return THREE if room >= THREE_FROM else TWO if room >= TWO_FROM else ONE
 
-    def addItem(self, item: QLayoutItem) -> None:
-        self._items.append(item)
-
-    def count(self) -> int:
-        return len(self._items)
-
-    def itemAt(self, index: int) -> QLayoutItem | None:
-        return self._items[index] if 0 <= index < len(self._items) else None
-
-    def takeAt(self, index: int) -> QLayoutItem | None:
-        return self._items.pop(index) if 0 <= index < len(self._items) else None
-
-    def hasHeightForWidth(self) -> bool:
-        return True
-
     def heightForWidth(self, width: int) -> int:
         return max((sum(h for _, h in pillar) for pillar in self._heights(width)), default=0)
-
-    def sizeHint(self) -> QSize:
-        return self.minimumSize()
 
     def invalidate(self) -> None:
         self._measured.clear()

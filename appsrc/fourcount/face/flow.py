@@ -3,38 +3,22 @@
 from __future__ import annotations
 
 from PySide6.QtCore import QPoint, QRect, QSize, Qt
-from PySide6.QtWidgets import QLayout, QLayoutItem, QWidget
+from PySide6.QtWidgets import QWidget
 
+from fourcount.face.item_layout import ItemLayout
 from fourcount.face.look import Look
 
 
-class FlowLayout(QLayout):
+class FlowLayout(ItemLayout):
     """Items from the left, wrapped like words, with a gap that grows with the text."""
 
     def __init__(self, look: Look, parent: QWidget | None = None, gap: int = 16) -> None:
-        super().__init__(parent)
-        self._look = look
+        super().__init__(look, parent)
         self._gap = gap
-        self._items: list[QLayoutItem] = []
         self.setContentsMargins(0, 0, 0, 0)
-
-    def addItem(self, item: QLayoutItem) -> None:
-        self._items.append(item)
-
-    def count(self) -> int:
-        return len(self._items)
-
-    def itemAt(self, index: int) -> QLayoutItem | None:
-        return self._items[index] if 0 <= index < len(self._items) else None
-
-    def takeAt(self, index: int) -> QLayoutItem | None:
-        return self._items.pop(index) if 0 <= index < len(self._items) else None
 
     def expandingDirections(self) -> Qt.Orientation:
         return Qt.Orientation(0)
-
-    def hasHeightForWidth(self) -> bool:
-        return True
 
     def heightForWidth(self, width: int) -> int:
         return self._flow(QRect(0, 0, width, 0), place=False)
@@ -42,9 +26,6 @@ class FlowLayout(QLayout):
     def setGeometry(self, rect: QRect) -> None:
         super().setGeometry(rect)
         self._flow(rect, place=True)
-
-    def sizeHint(self) -> QSize:
-        return self.minimumSize()
 
     def minimumSize(self) -> QSize:
         size = QSize()
