@@ -2,14 +2,14 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
+from collections.abc import Callable, Iterator
 from typing import Any
 
 import mpmath
 import pytest
 
-from fourcount.stats.results import Counts
-from tables import counts_of
+from fourcount.stats.results import Counts, Gap, Interval
+from tables import EXTREMES, counts_of, given_interval
 
 Statistic = Callable[[Any], Any]
 
@@ -33,6 +33,30 @@ def exact_z() -> Callable[[float], Any]:
             return mpmath.sqrt(2) * mpmath.erfinv(mpmath.mpf(level))
 
     return z
+
+
+@pytest.fixture(scope="session")
+def distances_at_limits(
+    exact_z: Callable[[float], Any], distance_from_root: Callable[..., float]
+) -> Callable[..., Iterator[tuple[tuple[int, ...], Interval, float, float]]]:
+    """Each limit of a score method over the extreme tables, and how far it lies from where its statistic is z."""
+
+    def distances(
+        method: Callable[[Counts, float], Interval | Gap],
+        level: float,
+        statistic_of: Callable[[tuple[int, ...]], Statistic],
+        given_exactly: Callable[[float], bool],
+    ) -> Iterator[tuple[tuple[int, ...], Interval, float, float]]:
+        z = exact_z(level)
+        for cells in EXTREMES:
+            interval = given_interval(method(counts_of(cells), level))
+            with mpmath.workdps(90):
+                statistic = statistic_of(cells)
+            for limit, target in ((interval.low, z), (interval.high, -z)):
+                if not given_exactly(limit):
+                    yield cells, interval, limit, distance_from_root(statistic, limit, target)
+
+    return distances
 
 
 @pytest.fixture(scope="session")

@@ -54,24 +54,15 @@ def _statistic(cells: tuple[int, ...], *, finite: bool) -> Callable[[Any], Any]:
 @pytest.mark.parametrize("method", SCORE)
 @pytest.mark.parametrize("level", [0.8, 0.95, 0.999])
 def test_score_limits_put_back_into_the_cubic(
-    method: Method,
-    level: float,
-    table: Table,
-    exact_z: Callable[[float], Any],
-    distance_from_root: Callable[..., float],
+    method: Method, level: float, distances_at_limits: Callable[..., Any]
 ) -> None:
     """At each limit the published statistic is z: to 1e-12 of the limit or 1e-15 of the width, up to 10^9 a cell."""
-    z = exact_z(level)
-    for cells in EXTREMES:
-        interval = given_interval(method(table(*cells), level))
-        with mpmath.workdps(90):
-            statistic = _statistic(cells, finite=method is difference.miettinen_nurminen)
-        width = interval.high - interval.low
-        for limit, target in ((interval.low, z), (interval.high, -z)):
-            if abs(limit) == 1:
-                continue
-            distance = distance_from_root(statistic, limit, target)
-            assert distance <= max(1e-12 * abs(limit), 1e-15 * width), (cells, limit)
+    finite = method is difference.miettinen_nurminen
+    found = distances_at_limits(
+        method, level, lambda cells: _statistic(cells, finite=finite), lambda limit: abs(limit) == 1
+    )
+    for cells, interval, limit, distance in found:
+        assert distance <= max(1e-12 * abs(limit), 1e-15 * (interval.high - interval.low)), (cells, limit)
 
 
 @pytest.mark.parametrize("method", SCORE)

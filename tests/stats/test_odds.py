@@ -42,21 +42,15 @@ def _statistic(cells: tuple[int, ...], *, finite: bool) -> Callable[[Any], Any]:
 @pytest.mark.parametrize("method", SCORE)
 @pytest.mark.parametrize("level", [0.8, 0.95, 0.999])
 def test_score_limits_put_back_into_the_statistic(
-    method: Method,
-    level: float,
-    table: Table,
-    exact_z: Callable[[float], Any],
-    distance_from_root: Callable[..., float],
+    method: Method, level: float, distances_at_limits: Callable[..., Any]
 ) -> None:
     """At each limit the published statistic is z, to 1e-14 of the limit, from single events to 10^9 a cell."""
-    z = exact_z(level)
-    for cells in EXTREMES:
-        interval = given_interval(method(table(*cells), level))
-        with mpmath.workdps(90):
-            statistic = _statistic(cells, finite=method is odds.miettinen_nurminen)
-        for limit, target in ((interval.low, z), (interval.high, -z)):
-            if 0 < limit < math.inf:
-                assert distance_from_root(statistic, limit, target) <= 1e-14 * limit, (cells, limit)
+    finite = method is odds.miettinen_nurminen
+    found = distances_at_limits(
+        method, level, lambda cells: _statistic(cells, finite=finite), lambda limit: limit in (0, math.inf)
+    )
+    for cells, _, limit, distance in found:
+        assert distance <= 1e-14 * limit, (cells, limit)
 
 
 def test_adrenaline_in_cardiac_arrest(table: Table) -> None:

@@ -6,9 +6,9 @@ from typing import TYPE_CHECKING
 
 from PySide6.QtCore import Signal
 from PySide6.QtGui import QAction
-from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout, QWidget
+from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout
 
-from fourcount.face.fields import ChoiceField, TextField
+from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.grid import Grid
 from fourcount.face.links import Link
@@ -21,17 +21,13 @@ if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
 
 
-class AsPrinted(QWidget):
+class AsPrinted(FieldsView):
     """Study, event, time span and the grid.
 
     **Signals**
-        edited: a person changed a text. Carries the field and the text.
-        left: a field lost focus. Carries the field.
         example_wanted: the quiet line of the first start was pressed.
     """
 
-    edited = Signal(str, str)
-    left = Signal(str)
     example_wanted = Signal()
 
     def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
@@ -119,11 +115,7 @@ class AsPrinted(QWidget):
         self._on_look_changed()
 
     def _connect_all(self) -> None:
-        for field in (self.name, self.event_words, self.span):
-            field.edited.connect(self.edited)
-            field.left.connect(self.left)
-        self.grid.edited.connect(self.edited)
-        self.grid.left.connect(self.left)
+        self._pass_on(self.name, self.event_words, self.span, self.grid)
         self.example.clicked.connect(self.example_wanted)
         self._look.changed.connect(self._on_look_changed)
 

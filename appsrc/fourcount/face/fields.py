@@ -147,6 +147,24 @@ class QuietField(TextField):
         painter.end()
 
 
+class FieldsView(QWidget):
+    """A part of the window that holds fields, and speaks for all of them.
+
+    **Signals**
+        edited: a person changed a text. Carries the field and the text.
+        left: a field lost focus. Carries the field.
+    """
+
+    edited = Signal(str, str)
+    left = Signal(str)
+
+    def _pass_on(self, *fields: TextField | FieldsView) -> None:
+        """Speak for these fields, or for another part that holds some."""
+        for field in fields:
+            field.edited.connect(self.edited)
+            field.left.connect(self.left)
+
+
 class ChoiceField(QComboBox):
     """A choice among a few, shown as its value with a small triangle over a hairline.
 

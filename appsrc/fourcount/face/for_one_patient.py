@@ -8,7 +8,7 @@ from PySide6.QtCore import QSize, Signal
 from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QGridLayout, QSizePolicy, QVBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, TextField
+from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.links import Link
 from fourcount.face.look import Look
@@ -71,17 +71,13 @@ class PictureView(QWidget):
         self.update()
 
 
-class ForOnePatient(QWidget):
+class ForOnePatient(FieldsView):
     """Starting risk, the effect that is carried to it, the picture, and what it comes to.
 
     **Signals**
-        edited: a person changed a text. Carries the field and the text.
-        left: a field lost focus. Carries the field.
         effect_chosen: the effect to carry was chosen. Carries its key.
     """
 
-    edited = Signal(str, str)
-    left = Signal(str)
     effect_chosen = Signal(object)
 
     def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
@@ -166,9 +162,7 @@ class ForOnePatient(QWidget):
         self._on_look_changed()
 
     def _connect_all(self) -> None:
-        for field in (self.baseline, self.source):
-            field.edited.connect(self.edited)
-            field.left.connect(self.left)
+        self._pass_on(self.baseline, self.source)
         self.effect.chosen.connect(self.effect_chosen)
         self._look.changed.connect(self._on_look_changed)
 

@@ -8,7 +8,7 @@ from PySide6.QtCore import QRectF, QSize, Qt, Signal
 from PySide6.QtGui import QFocusEvent, QFontMetrics, QKeyEvent, QPainter, QPaintEvent, QPen, QResizeEvent
 from PySide6.QtWidgets import QGridLayout, QLabel, QSizePolicy, QWidget
 
-from fourcount.face.fields import QuietField, TextField
+from fourcount.face.fields import FieldsView, QuietField, TextField
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
 from fourcount.record.outcome import CELLS, EventsOfTotal, Outcome
@@ -103,16 +103,8 @@ class CountCell(TextField):
         painter.end()
 
 
-class Grid(QWidget):
-    """Two groups by two outcomes, as the paper prints them: groups down or across, others or totals typed.
-
-    **Signals**
-        edited: a person changed a text. Carries the field and the text.
-        left: a field lost focus. Carries the field.
-    """
-
-    edited = Signal(str, str)
-    left = Signal(str)
+class Grid(FieldsView):
+    """Two groups by two outcomes, as the paper prints them: groups down or across, others or totals typed."""
 
     def __init__(self, look: Look) -> None:
         super().__init__()
@@ -251,8 +243,8 @@ class Grid(QWidget):
         """Put a widget into a block of the upright grid, with a small line under it or over the block's height."""
         if self._arranged and self._arranged[0] == "across":
             row, column = column, row
-        heads = row == 0 or column == 0
-        self._layout.addWidget(widget, 3 * row, column, 1 if heads else 2, 1)
+        one_line = row == 0 or under is not None
+        self._layout.addWidget(widget, 3 * row, column, 1 if one_line else 2, 1)
         if under:
             self._layout.addWidget(under, 3 * row + 1, column)
 
@@ -267,7 +259,7 @@ class Grid(QWidget):
         for key, field in before.items():
             field.setAlignment(left)
             self.roles[key].setAlignment(left | Qt.AlignmentFlag.AlignVCenter)
-        self.total_heading.setAlignment(RIGHT)
+        self.total_heading.setAlignment(RIGHT if upright else left | Qt.AlignmentFlag.AlignVCenter)
 
     def _small(self, alignment: Qt.AlignmentFlag = Qt.AlignmentFlag.AlignLeft) -> QLabel:
         label = QLabel()
@@ -276,9 +268,7 @@ class Grid(QWidget):
         return label
 
     def _connect_all(self) -> None:
-        for field in (*self.cells.values(), *self.labels.values(), *self.headings.values()):
-            field.edited.connect(self.edited)
-            field.left.connect(self.left)
+        self._pass_on(*self.cells.values(), *self.labels.values(), *self.headings.values())
         for cell in self.cells.values():
             cell.moved.connect(self._on_moved)
         self.labels["first"].returnPressed.connect(self._on_first_label_done)

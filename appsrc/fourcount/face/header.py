@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from PySide6.QtCore import Qt, QTimer, Signal
+from PySide6.QtCore import Qt, QTimer
 from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QHBoxLayout, QSizePolicy, QWidget
 
-from fourcount.face.fields import QuietField
+from fourcount.face.fields import FieldsView, QuietField
 from fourcount.face.links import Link
 from fourcount.face.look import Look
 from fourcount.face.text import Words
@@ -31,16 +31,8 @@ class Hairline(QWidget):
         painter.end()
 
 
-class Header(QWidget):
-    """Title and source, and at the right a notice of what was just done.
-
-    **Signals**
-        edited: a person changed a text. Carries the field and the text.
-        left: a field lost focus. Carries the field.
-    """
-
-    edited = Signal(str, str)
-    left = Signal(str)
+class Header(FieldsView):
+    """Title and source, and at the right a notice of what was just done."""
 
     def __init__(self, look: Look) -> None:
         super().__init__()
@@ -61,9 +53,7 @@ class Header(QWidget):
         self._row.addWidget(self.source, 5)
         self._row.addWidget(self.notice, 4)
         self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
-        for field in (self.title, self.source):
-            field.edited.connect(self.edited)
-            field.left.connect(self.left)
+        self._pass_on(self.title, self.source)
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 

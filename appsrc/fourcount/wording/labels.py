@@ -32,7 +32,7 @@ HINTS = {
     "words": "“fell at least once”",
     "span_text": "“12 months”",
     "starting_risk_source_text": "a register · no patient details",
-    "label": "group name",
+    "label": "name",
     "left_heading": "event",
     "right_heading": "no event",
     "left_heading_cases": "cases",
