@@ -87,7 +87,7 @@ def in_form(outcome: Outcome, form: type[EventsAndOthers] | type[EventsOfTotal])
     from fourcount.record.entry.table import read_table  # the window starts without the readers
 
     reading = read_table(outcome.table)
-    table = form(**{field: getattr(outcome.table, field) for field in CELLS})
+    table: Table = form(**{field: getattr(outcome.table, field) for field in CELLS})
     table = _converted(table, reading.first, "first_left_text", "first_right_text")
     return replace(outcome, table=_converted(table, reading.second, "second_left_text", "second_right_text"))
 

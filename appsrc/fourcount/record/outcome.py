@@ -12,13 +12,28 @@ from typing import Literal
 
 import msgspec
 
-Design = Literal["trial", "cohort", "survey", "case-control"]
+Design = Literal["trial", "cohort", "survey", "case-control", "matched", "paired", "before-after"]
 Position = Literal["first", "second"]
 Column = Literal["left", "right"]
 Effect = Literal["risk_ratio", "odds_ratio"]
 Layout = Literal["down", "across"]
+PaperMeasure = Literal["risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference"]
+Counting = Literal["people", "events"]
+Where = Literal["", "abstract", "text", "table", "figure", "supplement"]
 
-DESIGNS: tuple[Design, ...] = ("trial", "cohort", "survey", "case-control")
+DESIGNS: tuple[Design, ...] = ("trial", "cohort", "survey", "case-control", "matched", "paired", "before-after")
+PAIRED_DESIGNS: tuple[Design, ...] = ("matched", "paired", "before-after")
+"""Designs whose people come in pairs: cases with their own controls, or the same people twice."""
+
+PAPER_MEASURES: tuple[PaperMeasure, ...] = (
+    "risk_ratio",
+    "odds_ratio",
+    "hazard_ratio",
+    "rate_ratio",
+    "risk_difference",
+    "rate_difference",
+)
+WHERE: tuple[Where, ...] = ("", "abstract", "text", "table", "figure", "supplement")
 CELLS = ("first_left_text", "first_right_text", "second_left_text", "second_right_text")
 
 
@@ -40,7 +55,108 @@ class EventsOfTotal(msgspec.Struct, frozen=True, kw_only=True, tag="events-of-to
     second_right_text: str = ""
 
 
-Table = EventsAndOthers | EventsOfTotal
+class PercentOfTotal(msgspec.Struct, frozen=True, kw_only=True, tag="percent-of-total"):
+    """The print ``9.2% of 412``: in each group, the percentage with the left outcome (left) and all people (right)."""
+
+    first_left_text: str = ""
+    first_right_text: str = ""
+    second_left_text: str = ""
+    second_right_text: str = ""
+
+
+class Pairs(msgspec.Struct, frozen=True, kw_only=True, tag="pairs"):
+    """Counts of pairs: both sides had the left outcome, the first side only, the second side only, neither.
+
+    They stand in the four cells in that order, as a two-by-two table of the first side (down) by the second (across)
+    prints them. The two concordant counts may stay empty.
+    """
+
+    first_left_text: str = ""
+    first_right_text: str = ""
+    second_left_text: str = ""
+    second_right_text: str = ""
+
+
+class PersonTime(msgspec.Struct, frozen=True, kw_only=True, tag="person-time"):
+    """The print ``38 in 4,120 person-years``: in each group, events (left) and person-time (right), in one unit."""
+
+    first_left_text: str = ""
+    first_right_text: str = ""
+    second_left_text: str = ""
+    second_right_text: str = ""
+    unit_text: str = ""
+
+
+class RiskAtTime(msgspec.Struct, frozen=True, kw_only=True, tag="risk-at-time"):
+    """The print ``9% (6 to 12) at 2 years``: in each group, a risk (left) and its limits (right).
+
+    A left cell may hold the limits as well. The time is the outcome's time span; an empty level is 95%.
+    """
+
+    first_left_text: str = ""
+    first_right_text: str = ""
+    second_left_text: str = ""
+    second_right_text: str = ""
+    limits_level_text: str = ""
+
+
+class EffectOnly(msgspec.Struct, frozen=True, kw_only=True, tag="effect-only"):
+    """The print ``OR 0.49 (0.32 to 0.75)`` without counts: the effect stands in the outcome's ``paper_text``.
+
+    It is an adjusted one where ``adjusted_for_text`` says for what.
+    """
+
+
+class Stratum(msgspec.Struct, frozen=True, kw_only=True):
+    """One of several tables of one outcome, with its label ("under 65")."""
+
+    label_text: str = ""
+    first_left_text: str = ""
+    first_right_text: str = ""
+    second_left_text: str = ""
+    second_right_text: str = ""
+
+
+class Strata(msgspec.Struct, frozen=True, kw_only=True, tag="strata"):
+    """Several tables of one outcome, to be pooled; each row as ``38 · 374`` or, with ``of_total``, as ``38 of 412``."""
+
+    strata: tuple[Stratum, ...] = (Stratum(), Stratum())
+    of_total: bool = True
+
+
+Table = EventsAndOthers | EventsOfTotal | PercentOfTotal | Pairs | PersonTime | RiskAtTime | EffectOnly | Strata
+CellTable = EventsAndOthers | EventsOfTotal | PercentOfTotal | Pairs | PersonTime | RiskAtTime
+"""The forms whose text stands in four cells."""
+
+Form = Literal[
+    "events-and-others",
+    "events-of-total",
+    "percent-of-total",
+    "effect-only",
+    "pairs",
+    "person-time",
+    "risk-at-time",
+    "strata",
+]
+FORMS: dict[Form, type[Table]] = {
+    "events-and-others": EventsAndOthers,
+    "events-of-total": EventsOfTotal,
+    "percent-of-total": PercentOfTotal,
+    "effect-only": EffectOnly,
+    "pairs": Pairs,
+    "person-time": PersonTime,
+    "risk-at-time": RiskAtTime,
+    "strata": Strata,
+}
+"""Every form of print by its key, in the order in which the window offers them."""
+
+COUNTED_FORMS: tuple[Form, ...] = ("events-and-others", "events-of-total", "percent-of-total")
+"""The forms that give the four counts of one unpaired table."""
+
+
+def form_of(table: Table) -> Form:
+    """The key of a table's form."""
+    return next(form for form, kind in FORMS.items() if type(table) is kind)
 
 
 class Patient(msgspec.Struct, frozen=True, kw_only=True):
@@ -57,6 +173,12 @@ class Outcome(msgspec.Struct, frozen=True, kw_only=True):
     ``left_heading_text`` and ``right_heading_text`` name the two outcomes in the grid ("fell", "did not
     fall"); ``left_words_text`` and ``right_words_text`` say them in full for sentences ("fell at least
     once"). ``left_welcome`` says whether the left outcome is a good one; the right one is its opposite.
+
+    ``paper_text`` is what the paper itself prints as the result of these counts ("0.54 (0.37 to 0.78)"), of the
+    measure ``paper_measure`` unless the text names another one. ``adjusted_text`` is an effect that the paper prints
+    after adjustment for ``adjusted_for_text``. ``first_randomised_text`` and ``first_lost_text`` are people of the
+    first group beside those in the table; ``first_loss_ratio_text`` says how many times the risk of those followed
+    the lost ones have in the scenario of the reader's own. ``icc_text`` and ``cluster_size_text`` describe clusters.
     """
 
     name_text: str = ""
@@ -74,6 +196,22 @@ class Outcome(msgspec.Struct, frozen=True, kw_only=True):
     counted: Column = "left"
     layout: Layout = "down"
     patient: Patient = Patient()
+    counting: Counting = "people"
+    follow_up_varied: bool = False
+    where: Where = ""
+    paper_measure: PaperMeasure = "risk_ratio"
+    paper_text: str = ""
+    adjusted_measure: PaperMeasure = "odds_ratio"
+    adjusted_text: str = ""
+    adjusted_for_text: str = ""
+    first_randomised_text: str = ""
+    second_randomised_text: str = ""
+    first_lost_text: str = ""
+    second_lost_text: str = ""
+    first_loss_ratio_text: str = ""
+    second_loss_ratio_text: str = ""
+    icc_text: str = ""
+    cluster_size_text: str = ""
 
     @property
     def welcome(self) -> bool:

@@ -20,6 +20,17 @@ GAP_KEYS = (
     "beyond-one",  # a risk would pass 100%
     "undetermined-at-baseline",  # an infinite effect at a starting risk of 0, or an odds ratio of 0 at a risk of 1
     "beyond-zero",  # a risk would fall below 0
+    "no-discordant-pairs",  # all pairs agree: the odds ratio of pairs is 0/0
+    "concordant-pairs-unknown",  # only the discordant pairs are known: no risk of either side follows
+    "empty-pairs",  # there is no pair
+    "no-time",  # a group has no person-time
+    "no-strata",  # no stratum holds anything to compare
+    "one-stratum",  # one informative stratum has nothing to agree with
+    "fragility-not-below",  # p is not below the threshold at the start
+    "fragility-not-reached",  # no change of this kind brings p to the threshold
+    "icc-out-of-range",  # an intracluster correlation lies from 0 to 1
+    "not-positive",  # a ratio and its limits have to be above 0
+    "limits-disordered",  # a lower limit above its upper one, or an estimate outside both
 )
 """Every reason for which a function of this folder gives no figure."""
 
@@ -69,3 +80,53 @@ class Counts:
     @property
     def total(self) -> int:
         return self.index_total + self.reference_total
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class PairCounts:
+    """The four counts of pairs, each a whole number from 0 to 10^9.
+
+    A pair is two matched people (a case and its control) or one person twice. "Index only" counts the pairs in which
+    the event is there on the index side alone; these and "reference only" are the discordant ones.
+    """
+
+    both: int
+    index_only: int
+    reference_only: int
+    neither: int
+
+    @property
+    def total(self) -> int:
+        return self.both + self.index_only + self.reference_only + self.neither
+
+    @property
+    def discordant(self) -> int:
+        return self.index_only + self.reference_only
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class Rates:
+    """Events (0 to 10^9) and person-time (above 0, in any one unit) of two groups."""
+
+    index_events: int
+    index_time: float
+    reference_events: int
+    reference_time: float
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class LimitedRisk:
+    """A risk that a paper prints with its limits, all three as fractions from 0 to 1."""
+
+    risk: float
+    low: float
+    high: float
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class TimedRisks:
+    """Both groups' risks at one time with the limits printed for them, and the level of those limits."""
+
+    index: LimitedRisk
+    reference: LimitedRisk
+    level: float

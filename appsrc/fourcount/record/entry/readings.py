@@ -2,7 +2,11 @@
 
 from __future__ import annotations
 
+from typing import Literal
+
 import msgspec
+
+from fourcount.record.outcome import Form, Layout
 
 Fact = str | int | float
 
@@ -58,3 +62,147 @@ class TableReading(msgspec.Struct, frozen=True, kw_only=True):
     first: GroupCounts
     second: GroupCounts
     marks: tuple[Mark, ...] = ()
+
+
+class PairsReading(msgspec.Struct, frozen=True, kw_only=True):
+    """Counts of pairs by the print's sides; None where one is not known."""
+
+    both: int | None = None
+    first_only: int | None = None
+    second_only: int | None = None
+    neither: int | None = None
+    marks: tuple[Mark, ...] = ()
+
+
+class GroupRate(msgspec.Struct, frozen=True, kw_only=True):
+    """One group's events and person-time; None where one is not known."""
+
+    events: int | None = None
+    time: float | None = None
+
+
+class PersonTimeReading(msgspec.Struct, frozen=True, kw_only=True):
+    """Events and person-time of both groups in the print's order, and the unit as typed ("person-years")."""
+
+    first: GroupRate
+    second: GroupRate
+    unit: str = ""
+    marks: tuple[Mark, ...] = ()
+
+
+class PrintedRisk(msgspec.Struct, frozen=True, kw_only=True):
+    """A risk with its printed limits, all fractions from 0 to 1; None where one is not known."""
+
+    risk: float | None = None
+    low: float | None = None
+    high: float | None = None
+
+
+class RiskAtTimeReading(msgspec.Struct, frozen=True, kw_only=True):
+    """Both groups' printed risks in the print's order, and the level of their limits as a fraction."""
+
+    first: PrintedRisk
+    second: PrintedRisk
+    level: float = 0.95
+    marks: tuple[Mark, ...] = ()
+
+
+class StratumReading(msgspec.Struct, frozen=True, kw_only=True):
+    """One stratum: its label, its counts as far as they can be read, and the marks of its cells.
+
+    A mark's field is ``strata.3.first_left_text``, with the stratum's place counted from 0.
+    """
+
+    label: str
+    first: GroupCounts
+    second: GroupCounts
+    marks: tuple[Mark, ...] = ()
+
+    @property
+    def blank(self) -> bool:
+        """Whether nothing was typed in this row's cells."""
+        return self.first == GroupCounts() and self.second == GroupCounts() and not self.marks
+
+
+class PrintedNumber(msgspec.Struct, frozen=True, kw_only=True):
+    """A number as printed: its digits, how many decimals they have, its value (a percentage stays one)."""
+
+    text: str
+    value: float
+    decimals: int
+
+
+PrintedMeasure = Literal[
+    "risk_ratio",
+    "odds_ratio",
+    "hazard_ratio",
+    "rate_ratio",
+    "risk_difference",
+    "rate_difference",
+    "relative_reduction",
+    "number_needed",
+    "risk",
+    "p",
+]
+PrintedUnit = Literal["one", "percent", "per-1000"]
+"""Whether a printed difference, reduction or risk is a fraction, a percentage (points), or so many per 1,000."""
+
+
+class PrintedFigure(msgspec.Struct, frozen=True, kw_only=True):
+    """One result as a paper prints it: what it calls it, estimate, limits, level and p, as far as they are there.
+
+    ``level`` is the printed level as a fraction, None where none is printed. ``p`` stands behind ``p_relation``
+    ("=", "<" or ">"). ``adjusted`` says that the print itself calls the figure adjusted. ``text`` is the piece that
+    was read.
+    """
+
+    measure: PrintedMeasure
+    text: str
+    estimate: PrintedNumber | None = None
+    low: PrintedNumber | None = None
+    high: PrintedNumber | None = None
+    level: float | None = None
+    p: PrintedNumber | None = None
+    p_relation: Literal["=", "<", ">"] = "="
+    unit: PrintedUnit = "one"
+    adjusted: bool = False
+
+
+class PaperReading(msgspec.Struct, frozen=True, kw_only=True):
+    """All figures that a printed text holds, and a mark for what could not be read in it."""
+
+    figures: tuple[PrintedFigure, ...] = ()
+    marks: tuple[Mark, ...] = ()
+
+
+class PastedGroup(msgspec.Struct, frozen=True, kw_only=True):
+    """One group of a paste as the text for its two cells, and its label where one was told."""
+
+    left_text: str
+    right_text: str
+    label: str = ""
+
+
+class Pasted(msgspec.Struct, frozen=True, kw_only=True):
+    """What a pasted block or sentence was understood as.
+
+    ``form`` is the form of print; ``groups`` are its two rows (several pairs of rows for strata) as cell text.
+    ``left_heading`` and ``right_heading`` are headings told by a block; ``words`` says the event in full where a
+    sentence told it; ``unit`` is that of person-time. ``figures`` are printed results beside the counts and
+    ``paper_text`` the piece of text that holds them. ``ambiguous`` lists by key what might be understood otherwise; a
+    window shows what was understood before it is taken where anything is listed. ``source`` is "block" or "sentence".
+    """
+
+    form: Form
+    groups: tuple[PastedGroup, ...] = ()
+    stratum_labels: tuple[str, ...] = ()
+    left_heading: str = ""
+    right_heading: str = ""
+    words: str = ""
+    unit: str = ""
+    span: str = ""
+    layout: Layout = "down"
+    figures: tuple[PrintedFigure, ...] = ()
+    paper_text: str = ""
+    ambiguous: tuple[str, ...] = ()
+    source: Literal["block", "sentence"] = "block"

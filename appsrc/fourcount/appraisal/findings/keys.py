@@ -1,0 +1,72 @@
+"""The keys of measures, form by form, and of the reasons for which a figure is withheld."""
+
+from __future__ import annotations
+
+MEASURES = (
+    "risk_index",
+    "risk_reference",
+    "odds_index",
+    "odds_reference",
+    "risk_difference",
+    "number_needed",
+    "risk_ratio",
+    "other_risk_ratio",
+    "odds_ratio",
+)
+"""The keys of ``OutcomeFindings.measures``; ``other_risk_ratio`` is the ratio of not having the event."""
+
+PAIR_MEASURES = (
+    "pair_risk_index",
+    "pair_risk_reference",
+    "pair_difference",
+    "number_needed",
+    "pair_ratio",
+    "pair_odds_ratio",
+)
+"""The measures of the form ``pairs``."""
+
+RATE_MEASURES = ("rate_index", "rate_reference", "rate_difference", "rate_ratio")
+"""The measures of the form ``person-time``: events a unit of person-time."""
+
+TIMED_MEASURES = ("risk_index", "risk_reference", "risk_difference", "number_needed", "risk_ratio")
+"""The measures of the form ``risk-at-time``."""
+
+EFFECT_MEASURES = ("risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference")
+"""The form ``effect-only`` has exactly one of these, with the method "printed"."""
+
+POOLED_MEASURES = ("pooled_risk_difference", "pooled_risk_ratio", "pooled_odds_ratio")
+"""What the form ``strata`` adds to ``MEASURES``, which then are those of all strata thrown together ("crude")."""
+
+GAP_KEYS = (
+    "design-needs-pairs",  # a matched or paired design, and a table that is not of pairs
+    "pairs-need-design",  # a table of pairs in a design whose people are not paired
+    "design-no-rates",  # a survey or a case-control study has no person-time
+    "design-matched",  # a matched case-control study gives its conditional odds ratio and nothing else
+    "design-before-after",  # no number needed where the same people are looked at before and after
+    "events-not-people",  # events were counted, several in one person perhaps: they give no risk
+    "follow-up-varied",  # people were followed for different times: raw counts give no number needed
+    "cluster-without-icc",  # clusters, and no intracluster correlation: no interval and no p
+    "cluster-size-missing",  # an intracluster correlation without the clusters' mean size
+    "cluster-no-exact",  # counts divided by a design effect are not whole: exact methods do not take them
+    "effect-unreadable",  # the printed effect cannot be read
+    "effect-not-typed",  # no printed effect yet
+    "no-interval-printed",  # the printed effect has no limits, and no p to rebuild them from
+    "carried-later",  # this form's effect is not carried to a patient
+    "no-losses",  # nobody is said to be lost
+    "losses-unreadable",  # the number lost, or the ratio of risks among them, cannot be read
+    "limits-not-printed",  # a risk without its limits: no interval of the difference
+    "not-counts",  # this form has no four counts
+    "not-typed",  # not all four counts are there yet
+    "unreadable",  # a cell holds text that gives no count
+    "follows",  # the figure takes a moment and is computed apart
+    "design-survey-nnt",  # a cross-sectional survey has no number needed to treat
+    "design-case-control",  # a case-control study gives no risk: its totals are those of cases and controls
+    "case-control-needs-baseline",  # without an outside starting risk a case-control study says nothing of a patient
+    "no-starting-risk",  # nothing typed, and the reference group has nobody
+    "baseline-unreadable",  # the typed starting risk gives no risk
+    "carried-gap",  # the effect to carry has no value
+    "bare-starting-risk",  # the starting risk is a bare value without an interval of its own
+    "formula-beyond-one",  # a limit of the bare textbook formula passes 100%, where no risk of a patient lies
+    "formula-beyond-risks",  # a limit of the bare textbook formula parts two risks farther than they can lie apart
+)
+"""Every reason this folder gives for withholding a figure, beside those of ``stats.results.GAP_KEYS``."""
