@@ -31,6 +31,13 @@ GAP_KEYS = (
     "icc-out-of-range",  # an intracluster correlation lies from 0 to 1
     "not-positive",  # a ratio and its limits have to be above 0
     "limits-disordered",  # a lower limit above its upper one, or an estimate outside both
+    "cluster-below-one",  # a cluster holds one person at least
+    "not-whole",  # an exact method counts whole people, and these counts have fractions
+    "too-few-left",  # divided by the design effect, no more than one person is left in the whole table
+    "ratio-below-one",  # the exposed fare better: there is no share of events that the exposure explains
+    "ratio-above-one",  # the exposed fare worse: there is no share of events that the exposure prevents
+    "no-reference-events",  # without an event among the unexposed the fraction's log interval does not exist
+    "prevalence-out-of-range",  # the share of people exposed lies from 0 to 1
 )
 """Every reason for which a function of this folder gives no figure."""
 
@@ -53,7 +60,41 @@ class Interval:
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
-class Counts:
+class FractionalCounts:
+    """Four counts that need not be whole: divided by a design effect, or with a share of the people lost put back.
+
+    Whatever takes these takes whole ``Counts`` too. The score and textbook methods do; exact methods count tables of
+    whole people and take ``Counts`` alone.
+    """
+
+    index_events: float
+    index_non_events: float
+    reference_events: float
+    reference_non_events: float
+
+    @property
+    def index_total(self) -> float:
+        return self.index_events + self.index_non_events
+
+    @property
+    def reference_total(self) -> float:
+        return self.reference_events + self.reference_non_events
+
+    @property
+    def events(self) -> float:
+        return self.index_events + self.reference_events
+
+    @property
+    def non_events(self) -> float:
+        return self.index_non_events + self.reference_non_events
+
+    @property
+    def total(self) -> float:
+        return self.index_total + self.reference_total
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class Counts(FractionalCounts):
     """The four counts of an unpaired table, each a whole number from 0 to 10^9."""
 
     index_events: int
