@@ -84,6 +84,26 @@ def difference_interval(interval: AnyInterval, estimate: float | Gap) -> str:
     return sided(interval, estimate, write)
 
 
+def rate_interval(interval: AnyInterval, estimate: float | Gap, per: int) -> str:
+    """Rates for ``per`` units of person-time: ``6.5 to 12.7``, with the decimals of the estimate."""
+    if isinstance(interval, Gap):
+        return ""
+
+    def write(x: float) -> str:
+        return _rate(x, estimate, per)
+
+    return f"{_limit(interval.low, write)}{numbers.TO}{_limit(interval.high, write)}"
+
+
+def rate_difference_interval(interval: AnyInterval, estimate: float | Gap, per: int) -> str:
+    """As a difference per 100, for ``per`` units of person-time: ``2.1 fewer to 5.0 more``."""
+
+    def write(x: float) -> str:
+        return _rate(x, estimate, per)
+
+    return sided(interval, estimate, write)
+
+
 def sided(interval: AnyInterval, estimate: float | Gap, write: Callable[[float], str]) -> str:
     """An interval of sizes, smaller first where both are on the estimate's side; else each with its word."""
     if isinstance(interval, Gap):
@@ -160,6 +180,10 @@ def relative_interval(interval: AnyInterval, ratio: float) -> str:
 def bracketed(text: str) -> str:
     """An interval behind its estimate, in brackets, if there is one."""
     return f" ({text})" if text else ""
+
+
+def _rate(x: float, estimate: float | Gap, per: int) -> str:
+    return numbers.rate_limit(x * per, (x if isinstance(estimate, Gap) else estimate) * per)
 
 
 def _part(ratio: float) -> str:

@@ -19,6 +19,8 @@ TO = " to "
 
 PERCENT_DECIMALS = 1
 RATIO_DECIMALS = 2
+RATE_DECIMALS = 1
+LARGE_RATE = 1000  # from here on a rate has no decimals
 SMALL_FIGURES = 2  # significant digits at least of a small risk or difference
 NEARLY_ALL_DECIMALS = 2  # of a percentage above 99
 MOST_DECIMALS = 12
@@ -135,6 +137,30 @@ def _tiny(x: float) -> str:
     return f"{digits}×10{str(int(power)).translate(SUPERSCRIPT)}"
 
 
+def rate(x: float) -> str:
+    """The size of a rate, or of a difference of rates, in the unit that is shown: one decimal, two digits at least."""
+    return rate_limit(x, x)
+
+
+def rate_limit(x: float, estimate: float) -> str:
+    """The size of a limit of a rate, with the decimals of its estimate, more where it would reach no event."""
+    size = abs(x)
+    if size == math.inf:
+        return INFINITY
+    if 0 < size < SMALLEST_RATIO:
+        return _tiny(size)
+    own = abs(estimate) if 0 < abs(estimate) < math.inf else size
+    decimals = _rate_decimals(own)
+    if size and _scaled(size, decimals) == 0:
+        decimals = _rate_decimals(size)
+    return fixed(size, max(0, _apart_from_estimate(x, estimate, decimals, shift=0)))
+
+
+def quantity(x: float) -> str:
+    """An amount of person-time, or a mean, as it was typed: thousands parted, no trailing zeros."""
+    return f"{x:,.6f}".rstrip("0").rstrip(".")
+
+
 def p_value(p: float) -> str:
     """A p value: two significant digits down to ``<0.001``; ``>0.99`` where it would print 1 and is not."""
     if p < 0.001:
@@ -230,14 +256,24 @@ def _kept_from_ends(fraction: float, decimals: int, figures: int = SMALL_FIGURES
     return decimals
 
 
-def _apart_from_estimate(limit: float, estimate: float, decimals: int) -> int:
-    """One decimal more where a limit would print as the estimate does, if it then lies on its own side of it."""
+def _apart_from_estimate(limit: float, estimate: float, decimals: int, shift: int = 2) -> int:
+    """One decimal more where a limit would print as the estimate does, if it then lies on its own side of it.
+
+    ``shift`` is 2 where hundredths are printed of the numbers given.
+    """
     if limit == estimate or limit * estimate <= 0:
         return decimals
-    shown = _scaled(estimate, decimals + 2)
-    finer = _scaled(limit, decimals + 3) - 10 * shown
+    shown = _scaled(estimate, decimals + shift)
+    finer = _scaled(limit, decimals + shift + 1) - 10 * shown
     apart = finer > 0 if abs(limit) > abs(estimate) else finer < 0
-    return decimals + 1 if _scaled(limit, decimals + 2) == shown and apart else decimals
+    return decimals + 1 if _scaled(limit, decimals + shift) == shown and apart else decimals
+
+
+def _rate_decimals(size: float) -> int:
+    """Decimals of a rate: one from 1 to 1,000, none from there on, two significant digits below 1."""
+    if size >= LARGE_RATE or size == 0:
+        return 0 if size else RATE_DECIMALS
+    return max(RATE_DECIMALS, _significant_decimals(size, SMALL_FIGURES))
 
 
 def _ratio_decimals(x: float) -> int:

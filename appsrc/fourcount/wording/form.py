@@ -1,0 +1,42 @@
+"""What a table gives to compute with, whatever its form, and the level at which its intervals stand."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, Given, OutcomeFindings, PrintedFigure, TimedRisks
+from fourcount.record.outcome import COUNTED_FORMS
+from fourcount.record.paper import Choices
+
+PRINTED_LEVEL = 0.95
+"""The level of a printed interval that says none (common practice)."""
+
+NO_COUNTS = "not-counts"
+
+
+def given(findings: OutcomeFindings) -> Given | Gap:
+    """The counts, pairs, rates, printed risks or printed effect, or why there are none yet."""
+    counts = findings.counts
+    if not isinstance(counts, Gap):
+        return counts
+    return counts if findings.form in COUNTED_FORMS else findings.given
+
+
+def lacking(findings: OutcomeFindings) -> Gap | None:
+    """Why nothing can be said of this table yet; None where something can."""
+    found = given(findings)
+    return found if isinstance(found, Gap) else None
+
+
+def level_of(findings: OutcomeFindings, choices: Choices) -> float:
+    """The level of the intervals that are shown: the record's, or that of the print where only the print has any."""
+    found = findings.given
+    if isinstance(found, PrintedFigure):
+        return found.level or PRINTED_LEVEL
+    return found.level if isinstance(found, TimedRisks) else choices.level
+
+
+def measure_of(key: str, findings: OutcomeFindings) -> Figure | AnyNumberNeeded | Gap:
+    """A measure by its key, a pooled one included."""
+    strata = findings.strata
+    if strata is not None and not isinstance(strata, Gap) and key in strata.pooled:
+        return strata.pooled[key]
+    return findings.measures.get(key) or lacking(findings) or Gap(NO_COUNTS)

@@ -1,0 +1,35 @@
+"""What a printed effect is called, and for what it was adjusted."""
+
+from __future__ import annotations
+
+from fourcount.record.entry.readings import PrintedFigure, PrintedUnit
+from fourcount.record.outcome import Outcome
+from fourcount.wording import names
+
+PER_UNIT: dict[PrintedUnit, int] = {"one": 1, "percent": 100, "per-1000": 1_000}
+NAMES = {
+    "risk_ratio": "risk ratio",
+    "odds_ratio": "odds ratio",
+    "hazard_ratio": "hazard ratio",
+    "rate_ratio": "rate ratio",
+    "risk_difference": "risk difference",
+    "rate_difference": "difference of rates",
+    "relative_reduction": "relative reduction",
+    "number_needed": "number needed",
+    "risk": "risk",
+    "p": "p",
+}
+ADJUSTED = ", adjusted"
+
+
+def paper_measure_name(key: str, outcome: Outcome) -> str:
+    """A printed measure's name; in a survey ratio and difference are those of prevalences."""
+    return NAMES[key].replace("risk", names.risk_name(outcome), 1)
+
+
+def adjusted_words(outcome: Outcome, printed: PrintedFigure) -> str:
+    """``, adjusted for age and sex``; ``, adjusted`` where only the print calls it so; else ""."""
+    what = names.bare(outcome.adjusted_for_text)
+    if what:
+        return f"{ADJUSTED} for {what}"
+    return ADJUSTED if printed.adjusted else ""

@@ -1,0 +1,103 @@
+"""The words of the first column beyond the four cells: pairs, strata, the check, fields that few need, a paste."""
+
+from __future__ import annotations
+
+PAPER_MEASURES = {
+    "risk_ratio": "risk ratio",
+    "odds_ratio": "odds ratio",
+    "hazard_ratio": "hazard ratio",
+    "rate_ratio": "rate ratio",
+    "risk_difference": "risk difference",
+    "rate_difference": "rate difference",
+}
+"""What a paper may call the result that it prints."""
+
+ROWS_AS = {True: "rows 38 of 412", False: "rows 38 · 374"}
+
+PAIR_NAMES = {
+    "first_left_text": "pairs: {outcome} on both sides",
+    "first_right_text": "pairs: {outcome} on the side of {first} only",
+    "second_left_text": "pairs: {outcome} on the side of {second} only",
+    "second_right_text": "pairs: {outcome} on neither side",
+}
+PAIR_NOTES = {"first_right_text": "only {first}", "second_left_text": "only {second}"}
+"""Under the two counts that a comparison of pairs rests on."""
+
+SIDE_HINTS = {
+    "matched": ("cases", "controls"),
+    "before-after": ("after", "before"),
+    "paired": ("first side", "second side"),
+}
+"""What the two sides of a pair are called while they have no name of the reader's own."""
+
+STRATUM_CELL = "row {number}, {name}"
+
+CHECK_HEAD = "Does it add up?"
+CHECK_MARKS = {True: "agrees", False: "to check"}
+ADOPT = "Adopt {family}, {level}"
+
+OPTIONAL = {
+    "counting": "People or events",
+    "follow-up": "Follow-up varied",
+    "losses": "Randomised and lost",
+    "clusters": "Clusters",
+    "adjusted": "Adjusted effect",
+    "where": "Where it stands",
+}
+"""The links that open fields which few need."""
+
+CLOSE_FIELDS = "Close {name}"
+COUNTING = {"people": "people", "events": "events, several a person"}
+FOLLOW_UP = {False: "as long for everybody", True: "varied between people"}
+WHERE = {
+    "": "not said",
+    "abstract": "in the abstract",
+    "text": "in the text",
+    "table": "in a table",
+    "figure": "in a figure",
+    "supplement": "in a supplement",
+}
+OPTIONAL_FIELDS = {
+    "counting": "What is counted",
+    "follow-up": "Follow-up",
+    "where": "The numbers stand",
+    "losses": "Lost",
+    "randomised_text": "randomised",
+    "lost_text": "lost",
+    "loss_ratio_text": "their risk, times",
+    "icc_text": "Intracluster correlation",
+    "cluster_size_text": "Mean size of a cluster",
+    "clusters": "Clusters",
+    "adjusted": "Adjusted",
+    "adjusted_measure": "What the adjusted effect is",
+    "adjusted_text": "The adjusted effect as printed",
+    "adjusted_for_text": "What it is adjusted for",
+}
+OPTIONAL_HINTS = {
+    "icc_text": "correlation, “0.02”",
+    "cluster_size_text": "mean size, “25”",
+    "adjusted_text": "“0.58 (0.39 to 0.85)”",
+    "adjusted_for_text": "for “age, sex”",
+    "randomised_text": "",
+    "lost_text": "",
+    "loss_ratio_text": "1",
+}
+
+PASTE_HEAD = "Understood from what was pasted"
+PASTE_FIGURES = "Printed: {text}"
+PASTE_GROUP = "{label}: {words}"
+PASTE_LINKS = {"take": "Take it", "turn": "Other way round", "leave": "Leave it"}
+PASTE_PLACE = "line {number}"
+PASTED = "Filled from the paste: {parts}. Ctrl+Z takes it back."
+PASTED_PARTS = {
+    "table": "the table",
+    "labels": "names of the groups",
+    "headings": "names of the outcomes",
+    "words": "the event",
+    "unit": "the unit",
+    "span": "the time span",
+    "figures": "what the paper prints",
+}
+NO_TABLE_PASTED = "What is on the clipboard is no table and no sentence with counts."
+
+ROW_LINKS = {"add": "Add a row", "remove": "Remove row {number}"}
