@@ -23,6 +23,7 @@ from numpy.typing import NDArray
 from fourcount.stats.methods import METHODS, Method
 from fourcount.stats.results import Counts, Interval
 
+CELLS = ("index_events", "index_non_events", "reference_events", "reference_non_events")
 LEVEL = 0.95
 SIZES = ((10, 10), (20, 20), (15, 30), (40, 40))
 SINGLE_SIZES = (10, 20, 50)
@@ -90,7 +91,7 @@ def two_groups(method: Method, sizes: tuple[int, int], risks: Sequence[float], l
     """One method of two groups over the grid of both risks."""
     first, second = sizes
     cells = [(a, first - a, c, second - c) for a in range(first + 1) for c in range(second + 1)]
-    found = limits(method.interval(Counts(**dict(zip(Counts.__slots__, row, strict=True))), level) for row in cells)
+    found = limits(method.interval(Counts(**dict(zip(CELLS, row, strict=True))), level) for row in cells)
     both = np.einsum("ia,jc->ijac", binomial(first, risks), binomial(second, risks))
     weights = both.reshape(len(risks) ** 2, len(cells))
     index, reference = np.meshgrid(np.array(risks), np.array(risks), indexing="ij")

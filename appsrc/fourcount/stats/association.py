@@ -6,10 +6,10 @@ import math
 
 from fourcount.stats.estimates import without_a_contrast
 from fourcount.stats.normal import two_sided_p
-from fourcount.stats.results import Counts, Gap
+from fourcount.stats.results import FractionalCounts, Gap
 
 
-def pearson(counts: Counts) -> float | Gap:
+def pearson(counts: FractionalCounts) -> float | Gap:
     """Pearson's chi-square test: N (ad - bc)^2 / (n1 n2 m (N - m)), one degree of freedom.
 
     Where everybody had the event, or nobody, there is nothing to test: a gap. Source: Pearson 1900.
@@ -17,7 +17,7 @@ def pearson(counts: Counts) -> float | Gap:
     return _chi_square_p(counts, counts.total)
 
 
-def n_minus_1(counts: Counts) -> float | Gap:
+def n_minus_1(counts: FractionalCounts) -> float | Gap:
     """The (N-1) chi-square test: Pearson's statistic times (N-1)/N.
 
     It is the square of the Miettinen-Nurminen statistics of the difference, the ratio and the odds ratio at no
@@ -27,7 +27,7 @@ def n_minus_1(counts: Counts) -> float | Gap:
     return _chi_square_p(counts, counts.total - 1)
 
 
-def _chi_square_p(counts: Counts, weight: int) -> float | Gap:
+def _chi_square_p(counts: FractionalCounts, weight: float) -> float | Gap:
     gap = without_a_contrast(counts)
     if gap is not None:
         return gap

@@ -49,7 +49,7 @@ def mid_p_limits(events: int, total: int, level: float) -> Limits:
     return _lower(shapes, tail, low_start), _upper(shapes, tail, high_start)
 
 
-def jeffreys_limits(events: int, total: int, level: float) -> Limits:
+def jeffreys_limits(events: float, total: float, level: float) -> Limits:
     """The (1-level)/2 and (1+level)/2 quantiles of the beta distribution with x + 1/2 and n - x + 1/2."""
     tail = (1.0 - level) / 2.0
     low_start, high_start = _starts(events, total, level)
@@ -58,7 +58,7 @@ def jeffreys_limits(events: int, total: int, level: float) -> Limits:
     return low, _upper(shapes, tail, high_start) if events < total else 1.0
 
 
-def _starts(events: int, total: int, level: float) -> Limits:
+def _starts(events: float, total: float, level: float) -> Limits:
     near = score_limits(events, total, quantile(level))
     return near.low, near.high
 

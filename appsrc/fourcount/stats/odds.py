@@ -6,11 +6,11 @@ import math
 
 from fourcount.stats.estimates import without_people
 from fourcount.stats.normal import quantile
-from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.results import FractionalCounts, Gap, Interval
 from fourcount.stats.score import mirrored, multiplier, target
 
 
-def miettinen_nurminen(counts: Counts, level: float) -> Interval | Gap:
+def miettinen_nurminen(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The score interval with the variance times N/(N-1) (Miettinen and Nurminen 1985, Stat Med 4:213).
 
     The lower limit is 0 where a or d is 0, the upper infinite where b or c is 0.
@@ -18,12 +18,12 @@ def miettinen_nurminen(counts: Counts, level: float) -> Interval | Gap:
     return _score(counts, level, finite=True)
 
 
-def cornfield(counts: Counts, level: float) -> Interval | Gap:
+def cornfield(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The score interval without that factor: Cornfield's (1956), without a correction for continuity."""
     return _score(counts, level, finite=False)
 
 
-def woolf(counts: Counts, level: float) -> Interval | Gap:
+def woolf(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The logit interval psi exp(-+ z sqrt(1/a + 1/b + 1/c + 1/d)) (Woolf 1955).
 
     With a count of 0 it does not exist, and Gart's, which adds 1/2, takes its place and says so.
@@ -40,7 +40,7 @@ def woolf(counts: Counts, level: float) -> Interval | Gap:
     return Interval(low=centre * math.exp(-half_width), high=centre * math.exp(half_width))
 
 
-def gart(counts: Counts, level: float) -> Interval | Gap:
+def gart(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The logit interval with 1/2 added to all four counts, centre included (Gart 1966)."""
     gap = without_people(counts)
     if gap is not None:
@@ -52,16 +52,18 @@ def gart(counts: Counts, level: float) -> Interval | Gap:
     return Interval(low=centre * math.exp(-half_width), high=centre * math.exp(half_width), adjusted="half")
 
 
-def _score(counts: Counts, level: float, *, finite: bool) -> Interval | Gap:
+def _score(counts: FractionalCounts, level: float, *, finite: bool) -> Interval | Gap:
     gap = without_people(counts)
     if gap is not None:
         return gap
     reach = target(counts, level, finite=finite)
+    if isinstance(reach, Gap):
+        return reach
     below = _lower(mirrored(counts), reach)
     return Interval(low=_lower(counts, reach), high=1.0 / below if below > 0.0 else math.inf)
 
 
-def _lower(counts: Counts, reach: float) -> float:
+def _lower(counts: FractionalCounts, reach: float) -> float:
     """The psi below the estimate at which u^2 [n1/((a-u)(b+u)) + n2/((c+u)(d-u))] is the square of ``reach``.
 
     There the fitted counts are a-u, b+u, c+u and d-u: the margins of the table do not move.

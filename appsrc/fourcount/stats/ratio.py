@@ -6,11 +6,11 @@ import math
 
 from fourcount.stats.estimates import without_people
 from fourcount.stats.normal import quantile
-from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.results import FractionalCounts, Gap, Interval
 from fourcount.stats.score import mirrored, multiplier, target
 
 
-def koopman(counts: Counts, level: float) -> Interval | Gap:
+def koopman(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The asymptotic score interval (Koopman 1984, Biometrics 40:513), without the factor N/(N-1).
 
     The lower limit is 0 where the index group has no event, the upper infinite where the reference group has none.
@@ -18,12 +18,12 @@ def koopman(counts: Counts, level: float) -> Interval | Gap:
     return _score(counts, level, finite=False)
 
 
-def miettinen_nurminen(counts: Counts, level: float) -> Interval | Gap:
+def miettinen_nurminen(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The score interval with the variance times N/(N-1) (Miettinen and Nurminen 1985, Stat Med 4:213)."""
     return _score(counts, level, finite=True)
 
 
-def katz(counts: Counts, level: float) -> Interval | Gap:
+def katz(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The log interval R exp(-+ z sqrt(b/(a n1) + d/(c n2))) (Katz and others 1978, Biometrics 34:469).
 
     Where a group has no event it does not exist, and Walter's, which adds 1/2, takes its place and says so.
@@ -42,7 +42,7 @@ def katz(counts: Counts, level: float) -> Interval | Gap:
     return _around((a * n2) / (c * n1), quantile(level) * spread)
 
 
-def walter(counts: Counts, level: float) -> Interval | Gap:
+def walter(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The adjusted log interval: 1/2 added to the events and to the people of each group, centre included.
 
     Source: Walter 1975.
@@ -62,16 +62,18 @@ def _around(centre: float, log_half_width: float, adjusted: str | None = None) -
     return Interval(low=centre * math.exp(-log_half_width), high=centre * math.exp(log_half_width), adjusted=adjusted)
 
 
-def _score(counts: Counts, level: float, *, finite: bool) -> Interval | Gap:
+def _score(counts: FractionalCounts, level: float, *, finite: bool) -> Interval | Gap:
     gap = without_people(counts)
     if gap is not None:
         return gap
     reach = target(counts, level, finite=finite)
+    if isinstance(reach, Gap):
+        return reach
     below = _lower(mirrored(counts), reach)
     return Interval(low=_lower(counts, reach), high=1.0 / below if below > 0.0 else math.inf)
 
 
-def _lower(counts: Counts, reach: float) -> float:
+def _lower(counts: FractionalCounts, reach: float) -> float:
     """The R below the estimate at which u^2 [b/(n1(a-u)) + d/(n2(c+u))] is the square of ``reach``.
 
     There P1 = (a-u)/(n1-u) and P2 = (c+u)/(n2+u).
@@ -94,7 +96,7 @@ def _lower(counts: Counts, reach: float) -> float:
     return index_risk * ((n2 + u) / (c + u))
 
 
-def _lower_from_everybody(counts: Counts, reach: float) -> float:
+def _lower_from_everybody(counts: FractionalCounts, reach: float) -> float:
     """The lower limit where everybody in the index group had the event and the fitted P1 leaves 1 before the limit.
 
     As long as P1 stays 1 the multiplier rises to n1; from there it stays, P2 stays m/N, and P1 = R P2 falls until

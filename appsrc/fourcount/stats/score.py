@@ -19,18 +19,21 @@ from __future__ import annotations
 
 import math
 from collections.abc import Callable
+from typing import TypeVar
 
 from fourcount.stats.normal import quantile
-from fourcount.stats.results import Counts
+from fourcount.stats.results import FractionalCounts, Gap
 from fourcount.stats.roots import increasing_root
 
 Spread = Callable[[float], tuple[float, float]]
 """V and its slope at a multiplier."""
 
+Table = TypeVar("Table", bound=FractionalCounts)
 
-def mirrored(counts: Counts) -> Counts:
+
+def mirrored(counts: Table) -> Table:
     """The same table with the groups swapped: an upper limit is a lower limit of this one, seen from the other side."""
-    return Counts(
+    return type(counts)(
         index_events=counts.reference_events,
         index_non_events=counts.reference_non_events,
         reference_events=counts.index_events,
@@ -38,10 +41,15 @@ def mirrored(counts: Counts) -> Counts:
     )
 
 
-def target(counts: Counts, level: float, *, finite: bool) -> float:
-    """What u sqrt(V) must reach at a limit: z, times sqrt(N/(N-1)) with Miettinen and Nurminen's finite factor."""
+def target(counts: FractionalCounts, level: float, *, finite: bool) -> float | Gap:
+    """What u sqrt(V) must reach at a limit: z, times sqrt(N/(N-1)) with Miettinen and Nurminen's finite factor.
+
+    Two groups hold two people at least, but what a design effect leaves of them can be one or fewer: a gap there.
+    """
     z = quantile(level)
-    return z * math.sqrt(counts.total / (counts.total - 1)) if finite else z
+    if not finite:
+        return z
+    return z * math.sqrt(counts.total / (counts.total - 1)) if counts.total > 1 else Gap("too-few-left")
 
 
 def multiplier(spread: Spread, high: float, reach: float, start: float) -> float:

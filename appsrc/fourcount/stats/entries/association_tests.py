@@ -7,16 +7,20 @@ from __future__ import annotations
 
 from fourcount.stats import association
 from fourcount.stats.entries.entry import Test
-from fourcount.stats.results import Counts, Gap
+from fourcount.stats.results import Counts, FractionalCounts, Gap
 
 
-def _fisher(counts: Counts) -> float | Gap:
+def _fisher(counts: FractionalCounts) -> float | Gap:
+    if not isinstance(counts, Counts):
+        return Gap("not-whole")
     from fourcount.stats import conditional
 
     return conditional.fisher(counts)
 
 
-def _fisher_mid_p(counts: Counts) -> float | Gap:
+def _fisher_mid_p(counts: FractionalCounts) -> float | Gap:
+    if not isinstance(counts, Counts):
+        return Gap("not-whole")
     from fourcount.stats import conditional
 
     return conditional.fisher_mid_p(counts)

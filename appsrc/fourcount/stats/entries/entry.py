@@ -6,16 +6,28 @@ from collections.abc import Callable
 from dataclasses import dataclass
 from typing import Literal
 
-from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.results import Gap, Interval
 
-Measure = Literal["risk", "risk_difference", "risk_ratio", "odds_ratio"]
+Measure = Literal[
+    "risk",
+    "risk_difference",
+    "risk_ratio",
+    "odds_ratio",
+    "pair_difference",
+    "pair_ratio",
+    "pair_odds_ratio",
+    "rate",
+    "rate_difference",
+    "rate_ratio",
+]
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Method:
     """An interval method of one measure.
 
-    ``interval`` takes (events, total, level) for a risk and (counts, level) for the other measures.
+    ``interval`` takes (events, total, level) for a risk, (events, time, level) for a rate and (counts, level) for the
+    other measures, the counts being those of their form: ``Counts``, ``PairCounts`` or ``Rates``.
     """
 
     key: str
@@ -29,7 +41,7 @@ class Method:
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Test:
-    """A two-sided test of no association."""
+    """A two-sided test of no association; ``p`` takes the counts of its form."""
 
     __test__ = False  # pytest collects classes of this name
 
@@ -38,7 +50,7 @@ class Test:
     formula: str
     source: str
     note: str
-    p: Callable[[Counts], float | Gap]
+    p: Callable[..., float | Gap]
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
@@ -50,4 +62,25 @@ class Family:
     risk_difference: str
     risk_ratio: str
     odds_ratio: str
+    test: str
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class PairFamily:
+    """The same for matched pairs; ``risk`` is the method of one side's risk, a method of an unpaired risk."""
+
+    difference: str
+    ratio: str
+    odds_ratio: str
+    risk: str
+    test: str
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class RateFamily:
+    """The same for person-time."""
+
+    rate: str
+    difference: str
+    ratio: str
     test: str

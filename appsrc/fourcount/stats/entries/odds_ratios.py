@@ -4,22 +4,28 @@ from __future__ import annotations
 
 from fourcount.stats import odds
 from fourcount.stats.entries.entry import Method
-from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.results import Counts, FractionalCounts, Gap, Interval
 
 
-def _conditional_exact(counts: Counts, level: float) -> Interval | Gap:
+def _conditional_exact(counts: FractionalCounts, level: float) -> Interval | Gap:
+    if not isinstance(counts, Counts):
+        return Gap("not-whole")
     from fourcount.stats import conditional
 
     return conditional.conditional_exact(counts, level)
 
 
-def _conditional_mid_p(counts: Counts, level: float) -> Interval | Gap:
+def _conditional_mid_p(counts: FractionalCounts, level: float) -> Interval | Gap:
+    if not isinstance(counts, Counts):
+        return Gap("not-whole")
     from fourcount.stats import conditional
 
     return conditional.conditional_mid_p(counts, level)
 
 
-def _baptista_pike_mid_p(counts: Counts, level: float) -> Interval | Gap:
+def _baptista_pike_mid_p(counts: FractionalCounts, level: float) -> Interval | Gap:
+    if not isinstance(counts, Counts):
+        return Gap("not-whole")
     from fourcount.stats import conditional
 
     return conditional.baptista_pike_mid_p(counts, level)
