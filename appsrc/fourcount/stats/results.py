@@ -23,6 +23,7 @@ GAP_KEYS = (
     "no-discordant-pairs",  # all pairs agree: the odds ratio of pairs is 0/0
     "concordant-pairs-unknown",  # only the discordant pairs are known: no risk of either side follows
     "empty-pairs",  # there is no pair
+    "zero-count",  # one of the two counts compared is 0: the log of their ratio is infinite
     "no-time",  # a group has no person-time
     "no-strata",  # no stratum holds anything to compare
     "one-stratum",  # one informative stratum has nothing to agree with
