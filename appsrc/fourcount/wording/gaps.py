@@ -19,7 +19,54 @@ GAP_TEXTS = {
     "the score family gives one.",
     "beyond-one": "The risk would pass 100% here; where a risk ratio is carried, the odds ratio can be.",
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
+    "no-discordant-pairs": "All pairs agree, so their odds ratio is not determined: only pairs that differ tell.",
+    "concordant-pairs-unknown": "Only the pairs that differ were typed: without those that agree no risk follows.",
+    "empty-pairs": "There is no pair.",
+    "no-time": "A group has no person-time, so it has no rate.",
+    "no-strata": "No stratum has people in both groups and people with and without the event, so nothing can be pooled.",
+    "one-stratum": "Only one stratum has something to compare, so there is nothing for it to agree with.",
+    "fragility-not-below": "Fisher’s p is not below 0.05 in this table, so there is nothing to turn.",
+    "fragility-not-reached": "No change of outcomes in the group with fewer events brings Fisher’s p to 0.05.",
+    "icc-out-of-range": "An intracluster correlation lies from 0 to 1.",
+    "not-positive": "A ratio and its limits have to be above 0.",
+    "limits-disordered": "The lower limit lies above the upper one, or the estimate outside both; check the print.",
+    "zero-count": "One of the two counts compared is 0, where the bare formula has no interval; "
+    "the score family gives one.",
+    "cluster-below-one": "A cluster holds one person at least.",
+    "not-whole": "Counts divided by a design effect are not whole, and exact methods take whole counts only; "
+    "the score family gives this figure.",
+    "too-few-left": "Divided by the design effect, no more than one person is left, so nothing can be told.",
+    "ratio-below-one": "The group exposed fared better, so there is no share of events that the exposure explains.",
+    "ratio-above-one": "The group exposed fared worse, so there is no share of events that the exposure prevents.",
+    "no-reference-events": "Nobody in the reference group had the event, where the bare formula has no interval.",
+    "prevalence-out-of-range": "The share of people exposed lies from 0% to 100%.",
     # the design, the table, the patient
+    "design-needs-pairs": "In this design people come in pairs, and these counts are not of pairs: "
+    "unpaired figures are refused. Choose the form of pairs, and type how many pairs differ.",
+    "pairs-need-design": "These are counts of pairs; choose a study whose people come in pairs.",
+    "design-no-rates": "This design does not follow people over time, so it has no rates.",
+    "design-matched": "A matched case-control study sets how many cases and controls it takes and pairs them: "
+    "it gives the odds ratio of its pairs and nothing else.",
+    "design-before-after": "Before and after, nobody else is compared with: other things change with time too, "
+    "so there is no number needed to treat.",
+    "events-not-people": "Events were counted, perhaps several in one person: they give no risk of people.",
+    "follow-up-varied": "People were followed for different times: raw counts give no number needed to treat. "
+    "A printed risk at one time does.",
+    "cluster-without-icc": "Whole clusters were assigned, and intervals that take people for independent are too "
+    "narrow: type the intracluster correlation.",
+    "cluster-size-missing": "Type the mean size of a cluster: the intracluster correlation alone does not say "
+    "how much the intervals widen.",
+    "cluster-no-exact": "Counts divided by a design effect are not whole, and exact methods take whole counts only; "
+    "the score family gives this figure.",
+    "effect-unreadable": "The printed effect cannot be read; “0.54 (0.37 to 0.78)” would do.",
+    "effect-not-typed": "Type the printed effect with its limits, such as 0.54 (0.37 to 0.78).",
+    "no-interval-printed": "The print gives neither limits nor an exact p to rebuild them from.",
+    "carried-later": "This form is not carried to a patient here; the counts of both groups, or a printed risk ratio "
+    "or odds ratio with a starting risk, can be.",
+    "no-losses": "Nobody is said to be lost; type how many of each group were.",
+    "losses-unreadable": "A number lost, or the ratio of risks among the lost, cannot be read.",
+    "limits-not-printed": "A risk stands without its limits, so no interval of the difference or the ratio follows.",
+    "not-counts": "This form has no four counts.",
     "not-typed": "Type the four counts of the table.",
     "unreadable": "A cell of the table cannot be used; the line under the table says why.",
     "follows": "This figure takes a moment and will follow.",

@@ -45,7 +45,7 @@ def withheld_line(key: str, name: str, gap: Gap, group: LineGroup = "main") -> M
     return replace(blank_line(key, name, group), withheld=gap_text(gap))
 
 
-def figure_line(  # noqa: PLR0913 - a line's texts, by name
+def figure_line(
     key: str,
     name: str,
     figure: Figure,

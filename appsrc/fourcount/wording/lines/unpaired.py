@@ -9,7 +9,6 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.number_needed import whole_number_needed
 from fourcount.wording import limits, names, numbers
-from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
 from fourcount.wording.lines.line import LineGroup, MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.words import KINDS, NO_SPAN
