@@ -49,9 +49,10 @@ class FigureCheck(msgspec.Struct, frozen=True, kw_only=True):
 class CheckFindings(msgspec.Struct, frozen=True, kw_only=True):
     """The check of all that the paper prints, and the marks of what could not be read.
 
-    ``adopt`` is the family and level under which this record's figures are the paper's, where one is told.
+    ``cells`` are findings about percentages that stand beside the counts themselves. ``adopt`` is the family and level under which this record's figures are the paper's, where one is told.
     """
 
     figures: tuple[FigureCheck, ...] = ()
     marks: tuple[Mark, ...] = ()
+    cells: tuple[Finding, ...] = ()
     adopt: tuple[str, float] | None = None

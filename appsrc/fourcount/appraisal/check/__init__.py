@@ -1,0 +1,83 @@
+"""Whether what a paper prints follows from its counts, and by which method.
+
+Each printed figure is held against measures, methods, levels (90, 95, 99% and the printed one) and sides (groups
+swapped, the other outcome counted); what reproduces its digits is told first. What needs no counts is asked of every
+print: whether the limits are symmetric, and whether p goes with them.
+"""
+
+from __future__ import annotations
+
+from functools import lru_cache
+
+import msgspec
+
+from fourcount.appraisal.appraise import appraise
+from fourcount.appraisal.check.adoption import adoption
+from fourcount.appraisal.check.basis import Basis, basis_of
+from fourcount.appraisal.check.percentages import of_cells, of_risk
+from fourcount.appraisal.check.probability import p_findings
+from fourcount.appraisal.check.search import ALWAYS_TO, Hit, search, wanted_level
+from fourcount.appraisal.check.verdict import effect_findings
+from fourcount.appraisal.findings.check import CheckFindings, FigureCheck, Finding
+from fourcount.record.entry.printed import read_paper
+from fourcount.record.entry.readings import PrintedFigure
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+
+__all__ = ["check", "check_figures"]
+
+REMEMBERED = 256
+
+
+@lru_cache(maxsize=REMEMBERED)
+def check(outcome: Outcome, choices: Choices) -> CheckFindings:
+    """The check of all that an outcome's print says of its counts; remembered for equal arguments.
+
+    Of a figure printed after adjustment only what needs no counts is asked.
+    """
+    # The counts do not depend on the family, and this one is never slow.
+    findings = appraise(outcome, Choices(family="score", level=choices.level))
+    paper = read_paper(outcome.paper_text, outcome.paper_measure)
+    adjusted = read_paper(outcome.adjusted_text, outcome.adjusted_measure, "adjusted_text")
+    found = check_figures(paper.figures, basis_of(findings), choices)
+    alone = check_figures(tuple(_as_adjusted(figure) for figure in adjusted.figures), Basis(), choices)
+    return CheckFindings(
+        figures=found.figures + alone.figures,
+        marks=paper.marks + adjusted.marks,
+        cells=of_cells(findings.marks),
+        adopt=found.adopt,
+    )
+
+
+def check_figures(figures: tuple[PrintedFigure, ...], basis: Basis, choices: Choices) -> CheckFindings:
+    """The check of printed figures against what a table gives."""
+    found = [(figure, search(figure, basis.candidates(figure.measure), basis.largest)) for figure in figures]
+    return CheckFindings(
+        figures=tuple(_checked(figure, hits, basis) for figure, hits in found),
+        adopt=adoption(found, choices),
+    )
+
+
+def _checked(figure: PrintedFigure, hits: tuple[Hit, ...], basis: Basis) -> FigureCheck:
+    level = wanted_level(figure)
+    if hits and hits[0].match.fit == "all":
+        level = hits[0].match.level
+    candidates = basis.candidates(figure.measure)
+    said: tuple[Finding, ...] = ()
+    if figure.estimate is not None or figure.low is not None:
+        said = effect_findings(figure, hits, candidates, heavy=basis.largest <= ALWAYS_TO)
+    if figure.measure == "risk" and not hits:
+        said = of_risk(figure, basis.groups) or said
+    tests = basis.tests() if figure.p is not None else ()
+    said = _with_p(said, p_findings(figure, tests, level))
+    return FigureCheck(printed=figure, matches=tuple(hit.match for hit in hits), findings=said)
+
+
+def _with_p(said: tuple[Finding, ...], of_p: tuple[Finding, ...]) -> tuple[Finding, ...]:
+    """The sentences about p stand behind all others but the last resort."""
+    last = said[-1:] if said and said[-1].key in ("nearest", "adjusted") else ()
+    return said[: len(said) - len(last)] + of_p + last
+
+
+def _as_adjusted(figure: PrintedFigure) -> PrintedFigure:
+    return msgspec.convert({**msgspec.structs.asdict(figure), "adjusted": True}, PrintedFigure, from_attributes=True)
