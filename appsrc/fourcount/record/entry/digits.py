@@ -44,14 +44,18 @@ def plain(text: str) -> str:
     Digits of one script become 0-9; where digits of two scripts stand together all stay as they are, and nothing
     reads them, since some look like other digits. The result is cut at one character above ``LONGEST``.
     """
-    cut = text.strip(_EDGES)[: LONGEST + 1]
-    if cut.isascii():
-        return cut
-    cut = cut.translate(_PLAINER)
-    scripts = {ord(character) - int(character) for character in cut if character.isdecimal()}
+    return alike_in_ascii(text.strip(_EDGES)[: LONGEST + 1])
+
+
+def alike_in_ascii(text: str) -> str:
+    """The text, character for character, in ASCII where a character has an ASCII twin."""
+    if text.isascii():
+        return text
+    twins = text.translate(_PLAINER)
+    scripts = {ord(character) - int(character) for character in twins if character.isdecimal()}
     if len(scripts) != 1:
-        return cut
-    return "".join(str(int(character)) if character.isdecimal() else character for character in cut)
+        return twins
+    return "".join(str(int(character)) if character.isdecimal() else character for character in twins)
 
 
 def specimen(text: str) -> str:

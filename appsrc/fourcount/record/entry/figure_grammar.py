@@ -1,0 +1,296 @@
+"""The grammar of printed results: a name, an estimate, a level, two limits and a p, in the orders that print has."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+from typing import Literal
+
+from fourcount.record.entry.figure_names import Name, name_at
+from fourcount.record.entry.readings import PrintedMeasure, PrintedNumber, PrintedUnit
+from fourcount.record.entry.tokens import Token
+from fourcount.record.entry.word_list import words
+from fourcount.record.outcome import PaperMeasure
+
+Relation = Literal["=", "<", ">"]
+
+_OPENING = ("(", "[", "{")
+_CLOSING = (")", "]", "}")
+_BETWEEN = ("to", "through", "and", "till", "-", ",", ";", "/", "bis")
+_FILLERS = frozenset(
+    words(
+        "with a an the of from ranging ranged range confidence credible interval intervals limits limit ci cis "
+        "cri ui cl two-sided one-sided exact corresponding was is at level bootstrap bayesian robust"
+    )
+)
+_INTERVAL_WORDS = (
+    "ci",
+    "cis",
+    "c.i",
+    "cri",
+    "cl",
+    "ui",
+    "confidence",
+    "credible",
+    "uncertainty",
+    "conf",
+    "compatibility",
+)
+_TIME_WORDS = frozenset(
+    words("second seconds minute minutes min hour hours h day days d week weeks wk month months mo year years yr yrs")
+)
+_USUAL_LEVELS = (80, 90, 95, 97.5, 98, 99, 99.9)
+_P_WORDS = ("p", "p-value", "p-values")
+_NOT_THE_P_OF_AN_EFFECT = ("interaction", "trend", "heterogeneity", "noninferiority", "non-inferiority", "homogeneity")
+_RELATIONS = ("=", "<", ">")
+_LONGEST_WAY = 14
+
+
+class Figure:
+    """One result while it is read: places of its tokens and what was found between them."""
+
+    def __init__(self, first: int, name: Name | None) -> None:
+        self.first = first
+        self.after = first
+        self.name = name
+        self.estimate: PrintedNumber | None = None
+        self.low: PrintedNumber | None = None
+        self.high: PrintedNumber | None = None
+        self.level: float | None = None
+        self.p: PrintedNumber | None = None
+        self.p_relation: Relation = "="
+        self.unit: PrintedUnit = "one"
+        self.one_limit = ""
+
+    @property
+    def named(self) -> bool:
+        return self.name is not None
+
+    @property
+    def adjusted(self) -> bool:
+        return self.name is not None and self.name.adjusted
+
+    @property
+    def bare(self) -> bool:
+        """Whether it is a number alone, which is a result only where nothing stands before it."""
+        alone = self.name is None and self.low is None and self.p is None and self.unit == "one"
+        return alone and self.estimate is not None and self.estimate.value >= 0
+
+    def measure_or(self, usual: PaperMeasure) -> PrintedMeasure | None:
+        """What the figure is of, if one without a name is of ``usual``; None for what no count gives."""
+        if self.estimate is None:
+            return "p"
+        percent = self.unit == "percent"
+        if self.name is None:
+            if not percent or usual.endswith("difference"):
+                return usual
+            return "risk_difference" if self.estimate.value < 0 or self.low else "risk"
+        if self.name.vague and not (percent or self.unit == "per-1000" or usual.endswith("difference")):
+            return None
+        return self.name.measure
+
+
+class Grammar:
+    """A reader of results over tokens; ``leftover`` are the numbers that it took for nothing."""
+
+    def __init__(self, tokens: Sequence[Token], *, unnamed: bool) -> None:
+        self.tokens = tokens
+        self.unnamed = unnamed
+        self.leftover: list[Token] = []
+
+    def figures(self) -> list[Figure]:
+        """All results in reading order. Every step goes forward, so the work is linear in the text."""
+        found: list[Figure] = []
+        name: tuple[int, Name] | None = None
+        level: float | None = None
+        place = 0
+        while place < len(self.tokens):
+            if name and place - name[0] > _LONGEST_WAY:
+                name = None
+            if named := self._name(place):
+                name = (place, named)
+                place += named.length
+            elif level_found := self.level_at(place):
+                level, place = level_found
+                name = name and (place, name[1])
+            elif p_found := self.p_at(place):
+                place = self._take_p(found, place, p_found)
+            elif self._begins_figure(place, name is not None):
+                figure = self._figure(place, name)
+                figure.level = figure.level or level
+                name, level, place = None, None, figure.after
+                if found and figure.bare:
+                    self.leftover.append(self.tokens[figure.first])
+                else:
+                    found.append(figure)
+            else:
+                if self.tokens[place].kind == "number" and self._at(place + 1).lower not in _TIME_WORDS:
+                    self.leftover.append(self.tokens[place])
+                place += 1
+        return found
+
+    def _name(self, place: int) -> Name | None:
+        name = name_at(self.tokens, place)
+        if name and self.tokens[place].text == "OR":
+            following = self._at(place + 1)
+            if following.kind == "word" and following.lower not in _FILLERS | {"for", "or"}:
+                return None
+        return name
+
+    def _begins_figure(self, place: int, named: bool) -> bool:
+        """Whether an estimate stands here: a number, not of a length of time, nor a count of a total."""
+        token, following = self.tokens[place], self._at(place + 1)
+        if token.kind != "number" or not (named or self.unnamed):
+            return False
+        if following.lower in _TIME_WORDS or following.text == "/" or following.lower in ("of", "patients"):
+            return False
+        return self._at(place - 1).text != "/" and not (self._at(place - 1).lower in ("of",) and not named)
+
+    def _figure(self, place: int, name: tuple[int, Name] | None) -> Figure:
+        figure = Figure(name[0] if name else place, name[1] if name else None)
+        token = self.tokens[place]
+        figure.estimate = printed_number(token)
+        figure.unit = "percent" if token.percent else "one"
+        place = self._unit(figure, place + 1)
+        figure.after = place
+        opened = False
+        while place < len(self.tokens):
+            token = self.tokens[place]
+            if level := self.level_at(place):
+                figure.level, figure.after = level
+                opened, place = True, figure.after
+            elif (p := self.p_at(place)) and figure.p is None:
+                place = self._take_p([figure], place, p)
+            elif figure.low is None and token.kind == "number" and (after := self._limits(figure, place, opened)):
+                place = figure.after = after
+            elif token.text in _CLOSING:
+                place = figure.after = place + 1
+            elif self._passes(place):
+                opened = opened or token.text in _OPENING or token.lower in _INTERVAL_WORDS
+                place += 1
+            else:
+                break
+        self._close(figure)
+        return figure
+
+    def _passes(self, place: int) -> bool:
+        token = self.tokens[place]
+        if self._name(place) or token.text == "-":
+            return False
+        return token.kind == "break" or token.text in (*_OPENING, ",", ";", ":", "=") or token.lower in _FILLERS
+
+    def _limits(self, figure: Figure, place: int, opened: bool) -> int | None:
+        """The place after two limits that begin here, None where there are none; one alone is kept as such."""
+        token, between, second = self.tokens[place], self._at(place + 1), self._at(place + 2)
+        estimate = figure.estimate
+        if between.lower in _BETWEEN and second.kind == "number" and not self.level_at(place + 2):
+            if not opened and not (estimate and token.value <= estimate.value <= second.value):
+                return None
+            figure.low, figure.high = printed_number(token), printed_number(second)
+            if token.percent or second.percent:
+                figure.unit = "percent"
+            return self._unit(figure, place + 3)
+        before = self._at(place - 1)
+        alone = before.text in (*_OPENING, ",", ";", ":") or before.lower in _INTERVAL_WORDS
+        if not opened or not alone or between.text not in (*_CLOSING, ""):
+            return None
+        if "," in token.text and token.decimals and estimate and "," not in estimate.text:
+            low, _, high = token.text.partition(",")
+            figure.low, figure.high = _whole(low), _whole(high)
+            return place + 1
+        figure.one_limit = token.text
+        return place + 1
+
+    def _unit(self, figure: Figure, place: int) -> int:
+        """The place after "percentage points" or "per 1,000 person-years", if one of these stands here."""
+        following = [self._at(place + step).lower for step in range(4)]
+        if following[0] in ("percentage", "percent", "%") and following[1].startswith("point"):
+            figure.unit = "percent"
+            return place + 2
+        if following[0] in ("-", "percentage-point", "percentage-points", "points", "pp"):
+            if following[0] == "-" and not following[1].startswith("percentage"):
+                return place
+            figure.unit = "percent"
+            return place + (1 if following[0] != "-" else 3)
+        return self._so_many(figure, place, following)
+
+    def _so_many(self, figure: Figure, place: int, following: Sequence[str]) -> int:
+        """ "7 per 1,000", "3 fewer in 100 patients"."""
+        skip = 1 if following[0] in ("fewer", "more", "events", "cases") else 0
+        number = self._at(place + skip + 1)
+        if following[skip] not in ("per", "in") or number.kind != "number" or number.whole not in (100, 1000):
+            return place
+        figure.unit = "percent" if number.whole == 100 else "per-1000"
+        place += skip + 2
+        while self._at(place).lower in ("person-years", "person", "patient-years", "patients", "people", "years"):
+            place += 1
+        return place
+
+    def level_at(self, place: int) -> tuple[float, int] | None:
+        """A level that begins here ("95% CI", "95 percent confidence interval", "CI 95%") and the place after it."""
+        token, following = self.tokens[place], self._at(place + 1)
+        if token.kind == "number" and token.value >= 0:
+            step = 2 if following.text == "-" else 1
+            if self._at(place + step).lower in _INTERVAL_WORDS:
+                return token.value / 100, place + step + 1
+        usual = following.kind == "number" and following.percent and following.value in _USUAL_LEVELS
+        if usual and token.lower in _INTERVAL_WORDS and self._at(place + 2).lower not in ("to", "-"):
+            return following.value / 100, place + 2
+        return None
+
+    def p_at(self, place: int) -> tuple[Relation, Token, int, bool] | None:
+        """A p that begins here: relation, number, the place after it, and whether it is the effect's own."""
+        if self.tokens[place].lower not in _P_WORDS:
+            return None
+        own, relation = True, "="
+        for step in range(place + 1, min(place + 9, len(self.tokens))):
+            token = self.tokens[step]
+            if token.kind == "number":
+                told = token.decimals > 0 or relation != "="
+                return (relation, token, step + 1, own) if told or token.value in (0, 1) else None  # type: ignore[return-value]
+            if token.lower in _NOT_THE_P_OF_AN_EFFECT:
+                own = False
+            elif token.text in _RELATIONS:
+                relation = token.text if relation == "=" else relation
+            elif token.lower not in ("value", "values", "of", "was", "is", "for", "the", "by", "less", "than"):
+                return None
+            elif token.lower == "less":
+                relation = "<"
+        return None
+
+    def _take_p(self, found: list[Figure], place: int, p: tuple[Relation, Token, int, bool]) -> int:
+        """Give a p to the result before it, or make it one of its own."""
+        relation, token, after, own = p
+        if not own:
+            return after
+        if not found or found[-1].p is not None:
+            if not self.unnamed:
+                return after
+            found.append(Figure(place, None))
+        figure = found[-1]
+        figure.p, figure.p_relation, figure.after = printed_number(token), relation, after
+        self._close(figure)
+        return figure.after
+
+    def _close(self, figure: Figure) -> None:
+        """Take in the bracket that closes one opened within the figure, and leave out one opened before it."""
+        within = self.tokens[figure.first : figure.after]
+        depth = sum(token.text in _OPENING for token in within) - sum(token.text in _CLOSING for token in within)
+        while depth > 0 and self._at(figure.after).text in _CLOSING:
+            figure.after, depth = figure.after + 1, depth - 1
+        while depth < 0 and self.tokens[figure.after - 1].text in _CLOSING:
+            figure.after, depth = figure.after - 1, depth + 1
+
+    def _at(self, place: int) -> Token:
+        return self.tokens[place] if 0 <= place < len(self.tokens) else _NOTHING
+
+
+_NOTHING = Token("mark", "", 0, 0)
+
+
+def printed_number(token: Token) -> PrintedNumber:
+    """A token as a number of print; a minus of any kind stands as "-" in its text."""
+    return PrintedNumber(text=token.text, value=token.value, decimals=token.decimals)
+
+
+def _whole(text: str) -> PrintedNumber:
+    return PrintedNumber(text=text, value=float(text), decimals=0)

@@ -1,0 +1,115 @@
+"""A paper's own results as it prints them: what each is called, estimate, limits, level and p."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+
+from fourcount.record.entry.digits import specimen
+from fourcount.record.entry.figure_grammar import Figure, Grammar
+from fourcount.record.entry.readings import Fact, Mark, PaperReading, PrintedFigure, PrintedUnit
+from fourcount.record.entry.tokens import LONGEST_TEXT, Print, take_apart
+from fourcount.record.outcome import PaperMeasure
+
+PAPER_MARKS = (
+    "paper-unreadable",  # no figure in it at all
+    "paper-measure",  # a figure of another kind, such as a difference of means: left out
+    "paper-leftover",  # a number in it that was taken for nothing: the rest is used
+    "paper-one-limit",  # one number where two limits belong: the estimate is used without it
+    "paper-limits-order",  # the lower limit is printed behind the upper one: used as printed
+    "paper-limits-outside",  # the estimate lies outside its own limits: used as printed
+    "paper-level",  # a level below 50% or of 100% and more: left out
+    "paper-p",  # a p above 1 or below 0: left out
+    "paper-too-long",  # more text than is read
+)
+_LOWEST_LEVEL = 0.5
+
+
+def read_paper(text: str, measure: PaperMeasure, field: str = "paper_text") -> PaperReading:
+    """All results in a text such as ``RR 0.54 (95% CI, 0.37 to 0.78; P = 0.001)``.
+
+    A figure without a name is of ``measure``; an unnamed percentage beside a ratio is a risk, or a risk difference
+    where it has limits or a minus. Differences in points, with a percent sign or above 1 are percentages.
+    """
+    printed = take_apart(text)
+    if len(printed.shown) > LONGEST_TEXT:
+        return PaperReading(marks=(_mark(field, "paper-too-long", text),))
+    if not printed.tokens:
+        return PaperReading()
+    grammar = Grammar(printed.tokens, unnamed=True)
+    found = grammar.figures()
+    marks = [_mark(field, "paper-leftover", token.text, used=bool(found)) for token in grammar.leftover[:1]]
+    if not found:
+        return PaperReading(marks=(_mark(field, "paper-unreadable", text),))
+    figures = []
+    for figure in found:
+        marks.extend(_doubts(figure, printed, field))
+        finished = _finished(figure, printed, measure)
+        if finished:
+            figures.append(finished)
+    return PaperReading(figures=tuple(figures), marks=tuple(marks))
+
+
+def named_figures(printed: Print, measure: PaperMeasure) -> tuple[tuple[PrintedFigure, ...], tuple[int, int]]:
+    """The figures that a longer text names, and the places of the first and after the last of their tokens."""
+    found = Grammar(printed.tokens, unnamed=False).figures()
+    kept = [(figure, finished) for figure in found if (finished := _finished(figure, printed, measure))]
+    if not kept:
+        return (), (0, 0)
+    first = min(figure.first for figure, _ in kept)
+    return tuple(finished for _, finished in kept), (first, max(figure.after for figure, _ in kept))
+
+
+def _finished(figure: Figure, printed: Print, measure: PaperMeasure) -> PrintedFigure | None:
+    """A figure with its measure and unit decided; None for one of another kind or without anything usable."""
+    called = figure.measure_or(measure)
+    p = figure.p if figure.p and 0 <= figure.p.value <= 1 else None
+    if called is None or (figure.estimate is None and p is None):
+        return None
+    level = figure.level if figure.level and _LOWEST_LEVEL <= figure.level < 1 else None
+    return PrintedFigure(
+        measure=called,
+        text=printed.piece(figure.first, figure.after),
+        estimate=figure.estimate,
+        low=figure.low,
+        high=figure.high,
+        level=level,
+        p=p,
+        p_relation=figure.p_relation,
+        unit=_unit(figure, called),
+        adjusted=figure.adjusted,
+    )
+
+
+def _unit(figure: Figure, called: str) -> PrintedUnit:
+    if called not in ("risk_difference", "rate_difference", "relative_reduction", "risk"):
+        return "one"
+    if figure.unit != "one" or called == "rate_difference":
+        return figure.unit
+    values = [abs(number.value) for number in (figure.estimate, figure.low, figure.high) if number]
+    return "percent" if any(value > 1 for value in values) else "one"
+
+
+def _doubts(figure: Figure, printed: Print, field: str) -> Sequence[Mark]:
+    """What is odd in one printed figure; most of it is used all the same, as printed."""
+    text = printed.piece(figure.first, figure.after)
+    marks = []
+    if figure.named and figure.name is not None and figure.name.measure is None:
+        marks.append(_mark(field, "paper-measure", text))
+    if figure.one_limit:
+        marks.append(_mark(field, "paper-one-limit", text, used=True, limit=figure.one_limit))
+    if figure.level is not None and not _LOWEST_LEVEL <= figure.level < 1:
+        marks.append(_mark(field, "paper-level", text, used=True))
+    if figure.p and not 0 <= figure.p.value <= 1:
+        marks.append(_mark(field, "paper-p", text, used=True, p=figure.p.text))
+    if figure.low and figure.high and figure.estimate and figure.measure_or("risk_ratio") != "number_needed":
+        low, high, estimate = figure.low, figure.high, figure.estimate
+        facts: dict[str, Fact] = {"low": low.text, "high": high.text, "estimate": estimate.text}
+        if low.value > high.value:
+            marks.append(_mark(field, "paper-limits-order", text, used=True, **facts))
+        elif not low.value <= estimate.value <= high.value:
+            marks.append(_mark(field, "paper-limits-outside", text, used=True, **facts))
+    return marks
+
+
+def _mark(field: str, key: str, text: str, *, used: bool = False, **facts: Fact) -> Mark:
+    return Mark(field=field, key=key, facts={"text": specimen(text), **facts}, used=used)
