@@ -12,15 +12,18 @@ from __future__ import annotations
 
 from fourcount.stats.entries.association_tests import ASSOCIATION_TESTS
 from fourcount.stats.entries.comparisons import DIFFERENCE_METHODS, RATIO_METHODS
-from fourcount.stats.entries.entry import Family, Measure, Method, PairFamily, RateFamily, Test
+from fourcount.stats.entries.entry import Family, HomogeneityEntry, Measure, Method, PairFamily, RateFamily, Test
 from fourcount.stats.entries.odds_ratios import ODDS_RATIO_METHODS
 from fourcount.stats.entries.pairs import PAIR_METHODS, PAIR_TESTS
 from fourcount.stats.entries.rates import RATE_METHODS, RATE_TESTS
 from fourcount.stats.entries.risks import RISK_METHODS
+from fourcount.stats.entries.strata import HOMOGENEITY_TESTS, STRATA_METHODS, STRATA_TESTS
+from fourcount.stats.entries.timed import TIMED_METHODS
 from fourcount.stats.results import Counts
 
 __all__ = [
     "FAMILIES",
+    "HOMOGENEITY_TESTS",
     "METHODS",
     "PAIR_FAMILIES",
     "PAIR_METHODS",
@@ -28,13 +31,18 @@ __all__ = [
     "RATE_FAMILIES",
     "RATE_METHODS",
     "RATE_TESTS",
+    "STRATA_METHODS",
+    "STRATA_TESTS",
     "TESTS",
+    "TIMED_METHODS",
     "Family",
+    "HomogeneityEntry",
     "Measure",
     "Method",
     "PairFamily",
     "RateFamily",
     "Test",
+    "homogeneity_test",
     "method",
     "slow",
     "test",
@@ -92,10 +100,12 @@ RATE_FAMILIES: dict[str, RateFamily] = {
 }
 
 _METHOD_BY_KEY: dict[tuple[str, str], Method] = {
-    (entry.measure, entry.key): entry for entry in (*METHODS, *PAIR_METHODS, *RATE_METHODS)
+    (entry.measure, entry.key): entry
+    for entry in (*METHODS, *PAIR_METHODS, *RATE_METHODS, *STRATA_METHODS, *TIMED_METHODS)
 }
 _METHOD_BY_KEY |= {("pair_risk", entry.key): entry for entry in RISK_METHODS}  # one side of pairs is a risk like any
-_TEST_BY_KEY = {entry.key: entry for entry in (*TESTS, *PAIR_TESTS, *RATE_TESTS)}
+_TEST_BY_KEY = {entry.key: entry for entry in (*TESTS, *PAIR_TESTS, *RATE_TESTS, *STRATA_TESTS)}
+_HOMOGENEITY_TEST_BY_KEY = {entry.key: entry for entry in HOMOGENEITY_TESTS}
 
 _SLOW_FROM = 10_000_000  # the largest count at which the conditional odds ratio still keeps within one frame
 
@@ -111,6 +121,11 @@ def test(key: str) -> Test:
 
 
 test.__test__ = False  # type: ignore[attr-defined]  # pytest would collect a function of this name
+
+
+def homogeneity_test(key: str) -> HomogeneityEntry:
+    """The entry of one test of whether strata share an odds ratio."""
+    return _HOMOGENEITY_TEST_BY_KEY[key]
 
 
 def slow(counts: Counts, family: str) -> bool:

@@ -38,6 +38,11 @@ GAP_KEYS = (
     "ratio-below-one",  # the exposed fare better: there is no share of events that the exposure explains
     "ratio-above-one",  # the exposed fare worse: there is no share of events that the exposure prevents
     "no-reference-events",  # without an event among the unexposed the fraction's log interval does not exist
+    "endless-log",  # a ratio of 0 or without end has no logarithm, and the formula needs one
+    "endless-limit",  # a limit without end gives no standard error
+    "p-out-of-range",  # a p that is 0, 1 or beyond gives no standard error
+    "estimate-at-no-effect",  # an estimate at no effect has the p of 1 whatever its standard error is
+    "level-not-printed",  # limits printed at one level give none at another
     "prevalence-out-of-range",  # the share of people exposed lies from 0 to 1
 )
 """Every reason for which a function of this folder gives no figure."""
@@ -172,3 +177,12 @@ class TimedRisks:
     index: LimitedRisk
     reference: LimitedRisk
     level: float
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class HomogeneityTest:
+    """Whether the strata may share one odds ratio: a chi-square, its degrees of freedom and its p."""
+
+    chi_square: float
+    degrees: int
+    p: float

@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
+from collections.abc import Callable, Sequence
 from dataclasses import dataclass
 from typing import Literal
 
-from fourcount.stats.results import Gap, Interval
+from fourcount.stats.results import Counts, Gap, HomogeneityTest, Interval
 
 Measure = Literal[
     "risk",
@@ -19,6 +19,11 @@ Measure = Literal[
     "rate",
     "rate_difference",
     "rate_ratio",
+    "pooled_risk_difference",
+    "pooled_risk_ratio",
+    "pooled_odds_ratio",
+    "timed_difference",
+    "timed_ratio",
 ]
 
 
@@ -27,7 +32,8 @@ class Method:
     """An interval method of one measure.
 
     ``interval`` takes (events, total, level) for a risk, (events, time, level) for a rate and (counts, level) for the
-    other measures, the counts being those of their form: ``Counts``, ``PairCounts`` or ``Rates``.
+    other measures, the counts being those of their form: ``Counts``, ``PairCounts``, ``Rates``, ``TimedRisks`` or, for
+    a pooled measure, a sequence of ``Counts``.
     """
 
     key: str
@@ -51,6 +57,29 @@ class Test:
     source: str
     note: str
     p: Callable[..., float | Gap]
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class HomogeneityEntry:
+    """A test of whether strata may share one odds ratio."""
+
+    key: str
+    title: str
+    formula: str
+    source: str
+    note: str
+    test: Callable[[Sequence[Counts]], HomogeneityTest | Gap]
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
+class Calculation:
+    """A formula that gives something else than an interval or a p, so that the help can list it with its source."""
+
+    key: str
+    title: str
+    formula: str
+    source: str
+    note: str
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
