@@ -92,9 +92,9 @@ def _sum_over_own(falling: int, rising: int, odds: float) -> float:
         total += term
         if term <= _ENOUGH * total:
             return total
-    return total + (
-        term * _rest(falling - _PLAIN_TERMS, rising + _PLAIN_TERMS, odds) if falling > _PLAIN_TERMS else 0.0
-    )
+    if falling <= _PLAIN_TERMS:
+        return total
+    return total + term * _rest(falling - _PLAIN_TERMS, rising + _PLAIN_TERMS, odds)
 
 
 def _rest(falling: int, rising: int, odds: float) -> float:
