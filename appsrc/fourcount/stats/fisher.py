@@ -17,7 +17,8 @@ from fourcount.stats.estimates import without_a_contrast
 from fourcount.stats.hypergeometric import support
 from fourcount.stats.results import Counts, Gap
 
-_TIE = math.log1p(1e-7)
+TIE = math.log1p(1e-7)
+"""What the log probability of a table may exceed that of the observed one by and still count as tied with it."""
 
 
 def fisher(counts: Counts) -> float | Gap:
@@ -32,15 +33,15 @@ def fisher_mid_p(counts: Counts) -> float | Gap:
 
 def fisher_greater(counts: Counts) -> float | Gap:
     """One-sided: the probability of as many index events, or more."""
-    return without_a_contrast(counts) or _beyond(counts, 1)
+    return without_a_contrast(counts) or beyond(counts, 1)
 
 
 def fisher_less(counts: Counts) -> float | Gap:
     """One-sided: the probability of as many index events, or fewer."""
-    return without_a_contrast(counts) or _beyond(counts, -1)
+    return without_a_contrast(counts) or beyond(counts, -1)
 
 
-def _beyond(counts: Counts, away: int) -> float:
+def beyond(counts: Counts, away: int) -> float:
     """The probability of this table and those beyond it: summed where they fall, else by what is left."""
     if _ends(counts, -away):
         return 1.0
@@ -52,18 +53,25 @@ def _beyond(counts: Counts, away: int) -> float:
 
 def _unlikely(counts: Counts) -> float:
     """The sum over the tables no likelier than this one; 1 if it is the likeliest or tied with that."""
-    # The likeliest table has floor((n1 + 1)(m + 1) / (N + 2)) index events (common practice).
-    away = counts.index_events - (counts.index_total + 1) * (counts.events + 1) // (counts.total + 2)
+    away = from_likeliest(counts)
     likeliest = moved(counts, -away)
-    bound = log_probability(counts) + _TIE
+    bound = log_probability(counts) + TIE
     if log_probability(likeliest) <= bound:
         return 1.0
     total = 0.0
     for side in (-1, 1):
-        first = _first_unlikely(likeliest, side, bound, abs(away))
+        first = first_unlikely(likeliest, side, bound, abs(away))
         if first is not None:
             total += _times(tail(first, side), log_probability(first))
     return total
+
+
+def from_likeliest(counts: Counts) -> int:
+    """How many more index events this table has than the likeliest one: floor((n1 + 1)(m + 1) / (N + 2)).
+
+    Source: common practice.
+    """
+    return counts.index_events - (counts.index_total + 1) * (counts.events + 1) // (counts.total + 2)
 
 
 def _times(sum_over_own: float, log_own: float) -> float:
@@ -84,7 +92,7 @@ def _side(counts: Counts) -> int:
     return 1 if a * d > (b + 1) * (c + 1) else 0
 
 
-def _first_unlikely(likeliest: Counts, side: int, bound: float, guess: int) -> Counts | None:
+def first_unlikely(likeliest: Counts, side: int, bound: float, guess: int) -> Counts | None:
     """On one side, the table nearest the likeliest whose log probability is within the bound; None without one.
 
     Probabilities fall from the likeliest table outwards; the search spreads from a guess of the distance,
