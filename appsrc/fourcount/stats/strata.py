@@ -10,11 +10,25 @@ from __future__ import annotations
 
 import math
 from collections.abc import Sequence
-from fractions import Fraction
 
-from fourcount.stats.chi_square import upper_tail
+from fourcount.stats.homogeneity import breslow_day, breslow_day_tarone
 from fourcount.stats.normal import quantile, two_sided_p
-from fourcount.stats.results import Counts, Gap, HomogeneityTest, Interval
+from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.strata_sums import cross_products, excess, informative, nothing_to_compare, with_both_groups
+
+__all__ = [
+    "breslow_day",
+    "breslow_day_tarone",
+    "cochran_mantel_haenszel",
+    "cochran_mantel_haenszel_corrected",
+    "greenland_robins_difference",
+    "greenland_robins_ratio",
+    "pooled_odds_ratio",
+    "pooled_risk_difference",
+    "pooled_risk_ratio",
+    "robins_breslow_greenland",
+    "sato_difference",
+]
 
 
 def pooled_odds_ratio(strata: Sequence[Counts]) -> float | Gap:
@@ -22,10 +36,10 @@ def pooled_odds_ratio(strata: Sequence[Counts]) -> float | Gap:
 
     Source: Mantel and Haenszel 1959, J Natl Cancer Inst 22:719.
     """
-    compared = _compared(strata)
-    towards, against = _cross_products(compared)
+    compared = with_both_groups(strata)
+    towards, against = cross_products(compared)
     if towards == 0.0 and against == 0.0:
-        return _nothing_to_compare(compared)
+        return nothing_to_compare(compared)
     return towards / against if against else math.inf
 
 
@@ -36,10 +50,10 @@ def robins_breslow_greenland(strata: Sequence[Counts], level: float) -> Interval
     and no limits are given: the formula would know of one side only, and (0, inf) on the other says nothing.
     Source: Robins, Breslow and Greenland 1986, Biometrics 42:311.
     """
-    compared = _compared(strata)
-    towards, against = _cross_products(compared)
+    compared = with_both_groups(strata)
+    towards, against = cross_products(compared)
     if towards == 0.0 and against == 0.0:
-        return _nothing_to_compare(compared)
+        return nothing_to_compare(compared)
     if towards == 0.0 or against == 0.0:
         return Gap("endless-log")
     same_way, mixed, other_way = [], [], []
@@ -64,7 +78,7 @@ def pooled_risk_ratio(strata: Sequence[Counts]) -> float | Gap:
 
     Source: Mantel and Haenszel's weights; Greenland and Robins 1985, Biometrics 41:55.
     """
-    compared = _compared(strata)
+    compared = with_both_groups(strata)
     index, reference = _weighted_events(compared)
     if index == 0.0 and reference == 0.0:
         return Gap("no-events") if compared else Gap("no-strata")
@@ -78,7 +92,7 @@ def greenland_robins_ratio(strata: Sequence[Counts], level: float) -> Interval |
     nothing. No limits where the pooled risk ratio is 0 or infinite. Source: Greenland and Robins 1985,
     Biometrics 41:55.
     """
-    compared = _compared(strata)
+    compared = with_both_groups(strata)
     index, reference = _weighted_events(compared)
     if index == 0.0 and reference == 0.0:
         return Gap("no-events") if compared else Gap("no-strata")
@@ -102,45 +116,31 @@ def pooled_risk_difference(strata: Sequence[Counts]) -> float | Gap:
 
     Source: Mantel and Haenszel's weights; Greenland and Robins 1985, Biometrics 41:55.
     """
-    compared = _compared(strata)
+    compared = with_both_groups(strata)
     if not compared:
         return Gap("no-strata")
-    return math.fsum(_excess(t) for t in compared) / _weight(compared)
+    return math.fsum(excess(t) for t in compared) / _weight(compared)
 
 
 def sato_difference(strata: Sequence[Counts], level: float) -> Interval | Gap:
     """Wald's interval of the pooled risk difference with Sato's variance, for few large strata and many small ones.
 
-    The variance is formed in whole numbers and fractions: where risks lie near 0 and 1 its two parts all but cancel.
-    The limits can pass -1 and 1 and are given so. Source: Sato 1989, Biometrics 45:1323.
+    Sato's variance (D sum P + sum Q)/W^2 is that of Greenland and Robins plus sum((D - Dk) Pk)/W^2 over the strata's
+    own differences Dk. It is formed so, with every difference taken from the nearest of -1, 0 and 1: where risks lie
+    near 0 and 1 its two parts all but cancel. The limits can pass -1 and 1 and are given so. Source: Sato 1989,
+    Biometrics 45:1323.
     """
-    compared = _compared(strata)
+    compared = with_both_groups(strata)
     if not compared:
         return Gap("no-strata")
-    weight = sum((_ratio(t.index_total * t.reference_total, t.total) for t in compared), Fraction())
-    difference = (
-        sum(
-            (
-                _ratio(t.index_events * t.reference_total - t.reference_events * t.index_total, t.total)
-                for t in compared
-            ),
-            Fraction(),
-        )
-        / weight
+    weight = _weight(compared)
+    difference = math.fsum(excess(t) for t in compared) / weight
+    whole = round(difference)
+    beyond = math.fsum(_excess_over(t, whole) / t.total for t in compared) / weight
+    unlike = math.fsum(
+        (beyond - _excess_over(t, whole) / (t.index_total * t.reference_total)) * _tilt(t) for t in compared
     )
-    tilts = sum((_sato_tilt(t) for t in compared), Fraction())
-    spreads = sum(
-        (
-            _ratio(
-                t.index_events * t.reference_non_events + t.reference_events * t.index_non_events,
-                2 * t.total,
-            )
-            for t in compared
-        ),
-        Fraction(),
-    )
-    variance = (difference * tilts + spreads) / (weight * weight)
-    return _around_difference(float(difference), float(variance), level)
+    return _around_difference(difference, (_spread(compared) + unlike) / weight / weight, level)
 
 
 def greenland_robins_difference(strata: Sequence[Counts], level: float) -> Interval | Gap:
@@ -149,20 +149,12 @@ def greenland_robins_difference(strata: Sequence[Counts], level: float) -> Inter
     With one stratum it is Wald's own. The limits can pass -1 and 1 and are given so. Source: Greenland and Robins
     1985, Biometrics 41:55.
     """
-    compared = _compared(strata)
+    compared = with_both_groups(strata)
     if not compared:
         return Gap("no-strata")
     weight = _weight(compared)
-    parts = math.fsum(
-        (
-            t.index_events * t.index_non_events * t.reference_total**3
-            + t.reference_events * t.reference_non_events * t.index_total**3
-        )
-        / (t.index_total * t.reference_total * t.total * t.total)
-        for t in compared
-    )
-    difference = math.fsum(_excess(t) for t in compared) / weight
-    return _around_difference(difference, parts / weight / weight, level)
+    difference = math.fsum(excess(t) for t in compared) / weight
+    return _around_difference(difference, _spread(compared) / weight / weight, level)
 
 
 def cochran_mantel_haenszel(strata: Sequence[Counts]) -> float | Gap:
@@ -182,46 +174,6 @@ def cochran_mantel_haenszel_corrected(strata: Sequence[Counts]) -> float | Gap:
     return _common_association(strata, correction=0.5)
 
 
-def breslow_day(strata: Sequence[Counts]) -> HomogeneityTest | Gap:
-    """Whether the strata may share the pooled odds ratio: the distances from the counts that it fits, squared.
-
-    Degrees of freedom are the strata that tell something of an odds ratio, less one. Source: Breslow and Day 1980,
-    Statistical Methods in Cancer Research I, IARC, section 4.4 (from memory).
-    """
-    return _homogeneity(strata, tarone=False)
-
-
-def breslow_day_tarone(strata: Sequence[Counts]) -> HomogeneityTest | Gap:
-    """Breslow and Day's test less what the pooled odds ratio, which is not the likeliest one, adds to it.
-
-    Source: Tarone 1985, Biometrika 72:91.
-    """
-    return _homogeneity(strata, tarone=True)
-
-
-def _compared(strata: Sequence[Counts]) -> tuple[Counts, ...]:
-    return tuple(t for t in strata if t.index_total and t.reference_total)
-
-
-def _informative(strata: Sequence[Counts]) -> tuple[Counts, ...]:
-    """The strata in which both groups and both outcomes have somebody, and whose margins leave more than one table."""
-    return tuple(t for t in _compared(strata) if t.events and t.non_events and t.total > 1)
-
-
-def _nothing_to_compare(compared: Sequence[Counts]) -> Gap:
-    if compared and not any(t.events for t in compared):
-        return Gap("no-events")
-    if compared and not any(t.non_events for t in compared):
-        return Gap("no-non-events")
-    return Gap("no-strata")
-
-
-def _cross_products(compared: Sequence[Counts]) -> tuple[float, float]:
-    towards = math.fsum(t.index_events * t.reference_non_events / t.total for t in compared)
-    against = math.fsum(t.index_non_events * t.reference_events / t.total for t in compared)
-    return towards, against
-
-
 def _weighted_events(compared: Sequence[Counts]) -> tuple[float, float]:
     index = math.fsum(t.index_events * t.reference_total / t.total for t in compared)
     reference = math.fsum(t.reference_events * t.index_total / t.total for t in compared)
@@ -232,19 +184,29 @@ def _weight(compared: Sequence[Counts]) -> float:
     return math.fsum(t.index_total * t.reference_total / t.total for t in compared)
 
 
-def _excess(t: Counts) -> float:
-    """Observed index events less those expected with no effect, rounded once from the exact fraction."""
-    return (t.index_events * t.reference_total - t.reference_events * t.index_total) / t.total
+def _excess_over(t: Counts, whole: int) -> float:
+    """n1 n2 times what this stratum's risk difference has beyond a whole number: exact for whole counts."""
+    across = t.index_events * t.reference_total - t.reference_events * t.index_total
+    return across - whole * t.index_total * t.reference_total
 
 
-def _sato_tilt(t: Counts) -> Fraction:
+def _tilt(t: Counts) -> float:
+    """Sato's P: how fast this stratum's part of the variance grows with the common difference."""
     n1, n2 = t.index_total, t.reference_total
     twice = 2 * (n1 * n1 * t.reference_events - n2 * n2 * t.index_events) + n1 * n2 * (n2 - n1)
-    return _ratio(twice, 2 * t.total * t.total)
+    return twice / (2 * t.total * t.total)
 
 
-def _ratio(above: float, below: float) -> Fraction:
-    return Fraction(above) / Fraction(below)
+def _spread(compared: Sequence[Counts]) -> float:
+    """The variance of Greenland and Robins, times the square of the weights' sum."""
+    return math.fsum(
+        (
+            t.index_events * t.index_non_events * t.reference_total**3
+            + t.reference_events * t.reference_non_events * t.index_total**3
+        )
+        / (t.index_total * t.reference_total * t.total * t.total)
+        for t in compared
+    )
 
 
 def _around_ratio(centre: float, log_half_width: float) -> Interval:
@@ -259,60 +221,11 @@ def _around_difference(centre: float, variance: float, level: float) -> Interval
 
 
 def _common_association(strata: Sequence[Counts], *, correction: float) -> float | Gap:
-    told = _informative(strata)
+    told = informative(strata)
     if not told:
-        return _nothing_to_compare(_compared(strata))
-    distance = abs(math.fsum(_excess(t) for t in told))
+        return nothing_to_compare(with_both_groups(strata))
+    distance = abs(math.fsum(excess(t) for t in told))
     variance = math.fsum(
         t.index_total * t.reference_total * t.events * t.non_events / (t.total * t.total * (t.total - 1)) for t in told
     )
     return two_sided_p(max(0.0, distance - correction) / math.sqrt(variance))
-
-
-def _homogeneity(strata: Sequence[Counts], *, tarone: bool) -> HomogeneityTest | Gap:
-    told = _informative(strata)
-    if not told:
-        return _nothing_to_compare(_compared(strata))
-    if len(told) == 1:
-        return Gap("one-stratum")
-    towards, against = _cross_products(told)
-    if towards == 0.0 or against == 0.0:
-        return Gap("endless-log")
-    distances, variances = zip(*(_from_fitted(t, towards / against) for t in told), strict=True)
-    shared = math.fsum(distances) / math.fsum(variances) if tarone else 0.0
-    chi_square = math.fsum(
-        (distance - variance * shared) ** 2 / variance for distance, variance in zip(distances, variances, strict=True)
-    )
-    degrees = len(told) - 1
-    return HomogeneityTest(chi_square=chi_square, degrees=degrees, p=upper_tail(chi_square, degrees))
-
-
-def _from_fitted(t: Counts, odds_ratio: float) -> tuple[float, float]:
-    """The observed index events less those fitted with this odds ratio and the table's margins, and their variance.
-
-    All four fitted counts lie equally far from the observed ones; the smallest of them tells that distance best.
-    """
-    n1, n2, m, others = t.index_total, t.reference_total, t.events, t.non_events
-    fitted = (
-        (_fitted(odds_ratio, n1, m, n2 - m), t.index_events, 1.0),
-        (_fitted(1.0 / odds_ratio, n1, others, n2 - others), t.index_non_events, -1.0),
-        (_fitted(1.0 / odds_ratio, n2, m, n1 - m), t.reference_events, -1.0),
-        (_fitted(odds_ratio, n2, others, n1 - others), t.reference_non_events, 1.0),
-    )
-    smallest, observed, sign = min(fitted)
-    return sign * (observed - smallest), 1.0 / math.fsum(1.0 / count for count, _, _ in fitted)
-
-
-def _fitted(odds_ratio: float, row: float, column: float, rest: float) -> float:
-    """The count in a row and a column of these totals with this odds ratio; ``rest`` is the other row less the column.
-
-    The admissible root A of (o-1)A^2 - (o(row+column)+rest)A + o row column = 0, in a form that subtracts nothing: the
-    discriminant is a sum of parts of which none is below 0.
-    """
-    linear = odds_ratio * (row + column) + rest
-    other_row = rest + column
-    across = row * other_row + column * (row + other_row - column)
-    root = math.sqrt((odds_ratio * (row - column)) ** 2 + 2.0 * odds_ratio * across + rest * rest)
-    if linear >= 0.0:
-        return 2.0 * odds_ratio * row * column / (linear + root)
-    return (root - linear) / (2.0 * (1.0 - odds_ratio))
