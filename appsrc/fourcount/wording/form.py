@@ -40,3 +40,8 @@ def measure_of(key: str, findings: OutcomeFindings) -> Figure | AnyNumberNeeded 
     if strata is not None and not isinstance(strata, Gap) and key in strata.pooled:
         return strata.pooled[key]
     return findings.measures.get(key) or lacking(findings) or Gap(NO_COUNTS)
+
+
+def shown_choices(findings: OutcomeFindings, choices: Choices) -> Choices:
+    """The record's choices with the level at which this table's intervals stand."""
+    return Choices(family=choices.family, level=level_of(findings, choices))

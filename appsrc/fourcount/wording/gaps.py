@@ -23,7 +23,7 @@ GAP_TEXTS = {
     "concordant-pairs-unknown": "Only the pairs that differ were typed: without those that agree no risk follows.",
     "empty-pairs": "There is no pair.",
     "no-time": "A group has no person-time, so it has no rate.",
-    "no-strata": "No stratum has people in both groups and people with and without the event, so nothing can be pooled.",
+    "no-strata": "No stratum has people in both groups and people with and without the event, so none can be pooled.",
     "one-stratum": "Only one stratum has something to compare, so there is nothing for it to agree with.",
     "fragility-not-below": "Fisher’s p is not below 0.05 in this table, so there is nothing to turn.",
     "fragility-not-reached": "No change of outcomes in the group with fewer events brings Fisher’s p to 0.05.",
@@ -40,6 +40,11 @@ GAP_TEXTS = {
     "ratio-above-one": "The group exposed fared worse, so there is no share of events that the exposure prevents.",
     "no-reference-events": "Nobody in the reference group had the event, where the bare formula has no interval.",
     "prevalence-out-of-range": "The share of people exposed lies from 0% to 100%.",
+    "endless-log": "An estimate or a limit is 0 or infinite, where its logarithm has no end.",
+    "endless-limit": "A limit is infinite, so no standard error follows from it.",
+    "p-out-of-range": "A p lies above 0 and goes up to 1.",
+    "estimate-at-no-effect": "The estimate is no effect at all, so no interval can be rebuilt from its p.",
+    "level-not-printed": "The print says no level for its limits, so no other level follows from them.",
     # the design, the table, the patient
     "design-needs-pairs": "In this design people come in pairs, and these counts are not of pairs: "
     "unpaired figures are refused. Choose the form of pairs, and type how many pairs differ.",

@@ -1,36 +1,31 @@
-"""What each measure means in the reader's own words, and what it is not."""
+"""What each measure of one unpaired table means in the reader's own words, and what it is not."""
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import AnyNumberNeeded, Counts, Figure, Gap, OutcomeFindings
+from fourcount.appraisal.findings import AnyNumberNeeded, Counts, Figure, Gap, OutcomeFindings, PairCounts
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
-from fourcount.wording.gaps import gap_text
+from fourcount.wording.form import given
+from fourcount.wording.lines.pairs import whole_needed_of_pairs
+from fourcount.wording.meanings.parts import estimate_of, given_estimate, no_interval, spanned, times, with_interval
 
 COMPATIBLE_KINDS = "compatible with one fewer and with one more"
 
 
-def with_interval(key: str, figure: Figure, choices: Choices) -> str:
-    """A figure's interval behind its estimate: " (95% interval 3.3 to 12.4)", or "" where there is none."""
-    if isinstance(figure.interval, Gap):
-        return ""
-    return f" ({limits.interval_name(choices.level)} {lines.interval_text(key, figure)})"
-
-
 def difference(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
     """Per 100 and per 1,000; percentage points, not a relative reduction."""
-    estimate, words = _estimate(figure), names.event_words(outcome)
+    estimate, words = given_estimate(figure), names.event_words(outcome)
     groups = f"{names.in_group(outcome, 'index')} than {names.in_group(outcome, 'reference')}"
     if estimate == 0:
         same = f"{names.in_group(outcome, 'index')} as {names.in_group(outcome, 'reference')}"
-        said = f"Per 100 people as many {_spanned(words, outcome)} {same}"
-        return f"{said}{with_interval('risk_difference', figure, choices)}.{_no_interval(figure)}"
-    said = f"Per 100 people {lines.estimate_text('risk_difference', figure)} {_spanned(words, outcome)} {groups}"
+        said = f"Per 100 people as many {spanned(words, outcome)} {same}"
+        return f"{said}{with_interval('risk_difference', figure, choices)}.{no_interval(figure)}"
+    said = f"Per 100 people {lines.estimate_text('risk_difference', figure)} {spanned(words, outcome)} {groups}"
     return (
         f"{said}{with_interval('risk_difference', figure, choices)}; per 1,000 that is {numbers.thousand(estimate)} "
         f"{limits.side(estimate)}. These are percentage points, not a percentage of the {names.risk_name(outcome)}."
-        f"{_no_interval(figure)}"
+        f"{no_interval(figure)}"
     )
 
 
@@ -44,8 +39,8 @@ def number_needed(outcome: Outcome, needed: AnyNumberNeeded, findings: OutcomeFi
             "Both groups had the event equally often, so no number of people makes a difference of one "
             f"{interval}. An interval through infinity is {COMPATIBLE_KINDS}."
         )
-    change = f"one {limits.side(_estimate_of('risk_difference', findings))}"
-    people = lines.whole_needed(_counts(findings))
+    change = f"one {limits.side(estimate_of(_key('difference', findings), findings))}"
+    people = _people_needed(needed, findings)
     through = f" The interval runs through infinity: {COMPATIBLE_KINDS}." if needed.through_infinity else ""
     event, withheld = names.event_words(outcome), limits.withheld_needed(needed)
     return (
@@ -67,22 +62,22 @@ def risk_index(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choi
 
 def risk_ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
     """How many times one risk the other is, and between which two risks."""
-    estimate = _estimate(figure)
+    estimate = given_estimate(figure)
     relative = limits.relative(estimate, " of ")
-    said = f"{_times(names.risk_name(outcome), outcome, numbers.ratio(estimate))}"
+    said = f"{times(names.risk_name(outcome), outcome, numbers.ratio(estimate))}"
     return (
         f"{said}{with_interval('risk_ratio', figure, choices)}{f': a {relative}' if relative else ''}. "
         f"By itself it does not say how large the {names.risk_name(outcome)} is: {_two_risks(outcome, findings)}."
-        f"{_no_interval(figure)}"
+        f"{no_interval(figure)}"
     )
 
 
 def other_risk_ratio(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
     """The ratio with the other outcome counted; it is not the first one turned over."""
-    said = _times(f"{names.risk_name(outcome)} of the other outcome", outcome, numbers.ratio(_estimate(figure)))
+    said = times(f"{names.risk_name(outcome)} of the other outcome", outcome, numbers.ratio(given_estimate(figure)))
     return (
         f"{said}{with_interval('risk_ratio', figure, choices)}. It is not one divided by the first ratio."
-        f"{_no_interval(figure)}"
+        f"{no_interval(figure)}"
     )
 
 
@@ -91,22 +86,22 @@ def odds_ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choi
     conversion = findings.conversion
     claim = odds_ratio_claim(outcome, figure, choices)
     if isinstance(conversion, Gap) or isinstance(conversion.risk_ratio.estimate, Gap):
-        return f"{claim}; odds are events per non-event, not shares of all people.{_no_interval(figure)}"
+        return f"{claim}; odds are events per non-event, not shares of all people.{no_interval(figure)}"
     converted = conversion.risk_ratio
     baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
     interval = limits.bracketed(limits.ratio_interval(converted.interval, converted.estimate))
     ratio = numbers.ratio(conversion.risk_ratio.estimate)
     name = names.risk_name(outcome)
     meant = f"odds are not {name}s: at {baseline} this is a {name} ratio of {ratio}{interval}."
-    return f"{claim}; {meant}{_no_interval(figure)}"
+    return f"{claim}; {meant}{no_interval(figure)}"
 
 
 def odds_ratio_claim(outcome: Outcome, figure: Figure, choices: Choices) -> str:
     """The odds ratio in a sentence that speaks of odds and of nothing else, without its full stop."""
-    event = _spanned(names.event_words(outcome), outcome)
+    event = spanned(names.event_words(outcome), outcome)
     return (
         f"The odds that a person {names.in_group(outcome, 'index')} {event} were "
-        f"{numbers.ratio(_estimate(figure))} times those {names.in_group(outcome, 'reference')}"
+        f"{numbers.ratio(given_estimate(figure))} times those {names.in_group(outcome, 'reference')}"
         f"{with_interval('odds_ratio', figure, choices)}"
     )
 
@@ -125,9 +120,9 @@ def _risk(group: names.Group, outcome: Outcome, figure: Figure, findings: Outcom
     events, total = _group_counts(group, findings)
     people = f"{numbers.whole(events)} of {numbers.whole(total)} people {names.in_group(outcome, group)}"
     return (
-        f"{people} {_spanned(names.event_words(outcome), outcome)}: {numbers.percent(_estimate(figure))}"
+        f"{people} {spanned(names.event_words(outcome), outcome)}: {numbers.percent(given_estimate(figure))}"
         f"{with_interval(f'risk_{group}', figure, choices)}. "
-        f"It is an average of these people, not one person’s own {names.risk_name(outcome)}.{_no_interval(figure)}"
+        f"It is an average of these people, not one person’s own {names.risk_name(outcome)}.{no_interval(figure)}"
     )
 
 
@@ -135,9 +130,9 @@ def _odds(group: names.Group, outcome: Outcome, figure: Figure, findings: Outcom
     events, total = _group_counts(group, findings)
     return (
         f"{names.sentence_case(names.in_group(outcome, group))}: {numbers.whole(events)} with the event to "
-        f"{numbers.whole(total - events)} without it, odds of {numbers.ratio(_estimate(figure))}"
+        f"{numbers.whole(total - events)} without it, odds of {numbers.ratio(given_estimate(figure))}"
         f"{with_interval(f'odds_{group}', figure, choices)}. "
-        f"Odds are events per non-event, not a share of all people.{_no_interval(figure)}"
+        f"Odds are events per non-event, not a share of all people.{no_interval(figure)}"
     )
 
 
@@ -148,38 +143,28 @@ def _group_counts(group: names.Group, findings: OutcomeFindings) -> tuple[int, i
     return counts.reference_events, counts.reference_total
 
 
-def _times(name: str, outcome: Outcome, ratio: str) -> str:
-    index, reference = names.in_group(outcome, "index"), names.in_group(outcome, "reference")
-    return f"The {name} {index} was {ratio} times that {reference}"
-
-
 def _two_risks(outcome: Outcome, findings: OutcomeFindings) -> str:
     return f"it was {_risk_in('reference', outcome, findings)} and {_risk_in('index', outcome, findings)}"
 
 
 def _risk_in(group: names.Group, outcome: Outcome, findings: OutcomeFindings) -> str:
     """``17.1% with usual care``."""
-    return f"{numbers.percent(_estimate_of(f'risk_{group}', findings))} {names.in_group(outcome, group)}"
+    return f"{numbers.percent(estimate_of(_key(f'risk_{group}', findings), findings))} {names.in_group(outcome, group)}"
 
 
-def _spanned(words: str, outcome: Outcome) -> str:
-    span = names.within_span(outcome)
-    return f"{words} {span}" if span else words
+def _people_needed(needed: AnyNumberNeeded, findings: OutcomeFindings) -> str:
+    """The number needed in whole people, from the whole counts where there are any."""
+    found = given(findings)
+    if isinstance(found, Counts):
+        return lines.whole_needed(found)
+    return whole_needed_of_pairs(found) if isinstance(found, PairCounts) else numbers.number_needed(needed.estimate)
 
 
-def _estimate(figure: Figure) -> float:
-    """The estimate of a figure that is known to have one."""
-    if isinstance(figure.estimate, Gap):
-        raise TypeError(figure.estimate.key)
-    return figure.estimate
-
-
-def _estimate_of(key: str, findings: OutcomeFindings) -> float:
-    """The estimate of another measure, where this one cannot be without it."""
-    figure = findings.measures[key]
-    if not isinstance(figure, Figure):
-        raise TypeError(key)
-    return _estimate(figure)
+def _key(measure: str, findings: OutcomeFindings) -> str:
+    """A difference's or a risk's key in this form: that of pairs begins with "pair"."""
+    if isinstance(given(findings), PairCounts):
+        return f"pair_{measure}"
+    return "risk_difference" if measure == "difference" else measure
 
 
 def _counts(findings: OutcomeFindings) -> Counts:
@@ -187,7 +172,3 @@ def _counts(findings: OutcomeFindings) -> Counts:
     if isinstance(findings.counts, Gap):
         raise TypeError(findings.counts.key)
     return findings.counts
-
-
-def _no_interval(figure: Figure) -> str:
-    return f" {gap_text(figure.interval)}" if isinstance(figure.interval, Gap) else ""

@@ -1,0 +1,102 @@
+"""The one sentence above all lines: what a table of any form says, in whole people or person-time where that is honest.
+
+Where a form has no risks to speak of, it speaks of odds, of rates, or of what the paper prints.
+"""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PairCounts, Rates
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.wording import meanings
+from fourcount.wording.form import given, lacking, measure_of, shown_choices
+from fourcount.wording.gaps import gap_text
+from fourcount.wording.headlines.people import people_headline
+from fourcount.wording.headlines.rates import rates_headline
+from fourcount.wording.meanings import pairs, printed, strata
+
+UNPAIRED_KEYS = ("risk_difference", "risk_reference", "risk_index")  # the difference's gap names the empty group
+PAIR_KEYS = ("pair_difference", "pair_risk_reference", "pair_risk_index")
+RATE_KEYS = ("rate_difference", "rate_reference", "rate_index")
+
+
+def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """What the table says, or what it still needs."""
+    gap = lacking(findings)
+    if gap is not None:
+        return gap_text(gap)
+    shown = shown_choices(findings, choices)
+    if findings.form == "effect-only":
+        return _effect(outcome, findings, shown)
+    if findings.form == "strata":
+        return _strata(outcome, findings, shown)
+    found = given(findings)
+    if isinstance(found, Rates):
+        figures = _three(RATE_KEYS, findings)
+        return gap_text(figures) if isinstance(figures, Gap) else rates_headline(outcome, figures, found, shown)
+    if isinstance(found, PairCounts):
+        return _pairs(outcome, findings, shown)
+    if outcome.design == "case-control":
+        return _odds(outcome, findings, shown)
+    figures = _three(UNPAIRED_KEYS, findings)
+    return gap_text(figures) if isinstance(figures, Gap) else people_headline(outcome, figures, shown)
+
+
+def _three(keys: tuple[str, str, str], findings: OutcomeFindings) -> tuple[Figure, Figure, Figure] | Gap:
+    """The reference group's figure, the index group's and the difference, or why one has no estimate."""
+    figures: list[Figure] = []
+    for key in keys:
+        figure = measure_of(key, findings)
+        gap = figure if isinstance(figure, Gap) else figure.estimate
+        if isinstance(gap, Gap):
+            return gap
+        figures += [figure] if isinstance(figure, Figure) else []
+    difference, reference, index = figures
+    return reference, index, difference
+
+
+def _odds(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    figure = findings.measures["odds_ratio"]
+    if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
+        return f"{meanings.odds_ratio_claim(outcome, figure, choices)}."
+    return _why("odds_ratio", findings)
+
+
+def _pairs(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """People where all pairs are known; odds, and the pairs that differ, in a matched study or where only these are."""
+    figures = _three(PAIR_KEYS, findings)
+    if not isinstance(figures, Gap):
+        return people_headline(outcome, figures, choices)
+    figure = measure_of("pair_odds_ratio", findings)
+    if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
+        claim = pairs.odds_ratio_claim(outcome, figure, choices)
+        return f"{claim}. {pairs.those_that_differ(outcome, findings)}"
+    return _why("pair_odds_ratio", findings)
+
+
+def _effect(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    key = next(iter(findings.measures), outcome.paper_measure)
+    figure = measure_of(key, findings)
+    if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
+        return printed.effect(key, outcome, figure, findings, choices)
+    return _why(key, findings)
+
+
+def _strata(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """The pooled difference, or the pooled odds ratio where there is none, beside the crude figure."""
+    for key, claim in (
+        ("pooled_risk_difference", strata.difference_claim),
+        ("pooled_odds_ratio", strata.odds_ratio_claim),
+    ):
+        figure = measure_of(key, findings)
+        if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
+            return " ".join(filter(None, (f"{claim(outcome, figure, choices)}.", strata.crude_text(key, findings))))
+    return _why("pooled_odds_ratio", findings)
+
+
+def _why(key: str, findings: OutcomeFindings) -> str:
+    """Why a measure, or its estimate, is not there."""
+    measure = measure_of(key, findings)
+    if isinstance(measure, Gap):
+        return gap_text(measure)
+    return gap_text(measure.estimate) if isinstance(measure.estimate, Gap) else ""

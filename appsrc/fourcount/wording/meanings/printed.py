@@ -1,0 +1,93 @@
+"""What a printed effect says by itself, and what two printed risks say: all from the print, nothing from counts."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PrintedFigure
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.wording import limits, lines, names, numbers
+from fourcount.wording.form import given
+from fourcount.wording.meanings import unpaired
+from fourcount.wording.meanings.parts import given_estimate, no_interval, spanned, times, with_interval
+from fourcount.wording.printed import PER_UNIT, adjusted_words, paper_measure_name
+
+UNCHECKED = "Without counts it cannot be checked against them"
+NO_RISKS = "by itself it does not say how large the {risk}s are"
+NO_RATES = "by itself it does not say how large the rates are"
+NO_START = "by itself it does not say from which {risk}"
+NO_SHARES = "odds are not shares of people"
+NO_RISK_RATIO = "it compares rates from moment to moment, and is no {risk} ratio"
+
+
+def effect(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
+    """The printed effect in a sentence, and that nothing here stands behind it but the print."""
+    printed = given(findings)
+    if not isinstance(printed, PrintedFigure):
+        raise TypeError(key)
+    name = paper_measure_name(key, outcome)
+    article = "an" if name.startswith("odds") else "a"
+    adjusted = adjusted_words(outcome, printed)
+    claim = _claim(key, outcome, figure, printed, choices)
+    but = _but(key).format(risk=names.risk_name(outcome))
+    return f"The paper prints {article} {name}{adjusted}: {claim}. {UNCHECKED}, and {but}.{no_interval(figure)}"
+
+
+def risk(group: names.Group, outcome: Outcome, figure: Figure, choices: Choices) -> str:
+    """A risk at a time, as printed."""
+    return (
+        f"{numbers.percent(given_estimate(figure))} of people {names.in_group(outcome, group)} "
+        f"{spanned(names.event_words(outcome), outcome)}{with_interval(f'risk_{group}', figure, choices)}, as printed: "
+        f"an estimate that allows for people followed for different times.{no_interval(figure)}"
+    )
+
+
+def risk_reference(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
+    """The reference group's printed risk."""
+    return risk("reference", outcome, figure, choices)
+
+
+def risk_index(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
+    """The index group's printed risk."""
+    return risk("index", outcome, figure, choices)
+
+
+def _claim(key: str, outcome: Outcome, figure: Figure, printed: PrintedFigure, choices: Choices) -> str:
+    """What the effect says, in lower case and without its full stop; of an odds ratio in odds only."""
+    estimate = given_estimate(figure)
+    interval = with_interval(key, figure, choices, per := PER_UNIT[printed.unit] if key == "rate_difference" else 1)
+    index, reference = names.in_group(outcome, "index"), names.in_group(outcome, "reference")
+    if key == "odds_ratio":
+        claim = unpaired.odds_ratio_claim(outcome, figure, choices)
+        return f"{claim[:1].lower()}{claim[1:]}"
+    if key == "hazard_ratio":
+        return (
+            f"at any moment, among people still without it, the rate of the event {index} was "
+            f"{numbers.ratio(estimate)} times that {reference}{interval}"
+        )
+    if key in ("risk_ratio", "rate_ratio"):
+        name = names.risk_name(outcome) if key == "risk_ratio" else "rate of events"
+        said = times(name, outcome, numbers.ratio(estimate))
+        return f"{said[:1].lower()}{said[1:]}{interval}"
+    people = "100 people" if key == "risk_difference" else f"{per:,} of person-time"
+    event = spanned(names.event_words(outcome), outcome) if key == "risk_difference" else "events"
+    change = lines.estimate_text(key, figure, per)
+    if estimate == 0:
+        return f"per {people} as many {event} {index} as {reference}{interval}"
+    return f"per {people} {change} {event} {index} than {reference}{interval}"
+
+
+def _but(key: str) -> str:
+    """What the effect by itself does not say."""
+    return {
+        "odds_ratio": NO_SHARES,
+        "risk_ratio": NO_RISKS,
+        "hazard_ratio": NO_RISK_RATIO,
+        "rate_ratio": NO_RATES,
+        "risk_difference": NO_START,
+        "rate_difference": NO_RATES,
+    }[key]
+
+
+def relative_of(figure: Figure) -> str:
+    """``relative reduction of 46%`` of a printed ratio, or ""."""
+    return "" if isinstance(figure.estimate, Gap) else limits.relative(figure.estimate, " of ")
