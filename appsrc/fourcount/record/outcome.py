@@ -214,9 +214,14 @@ class Outcome(msgspec.Struct, frozen=True, kw_only=True):
     cluster_size_text: str = ""
 
     @property
+    def counts_left(self) -> bool:
+        """Whether the left outcome is the one counted. Person-time has events alone, and they stand left."""
+        return self.counted == "left" or isinstance(self.table, PersonTime)
+
+    @property
     def welcome(self) -> bool:
         """Whether the counted outcome is a good one."""
-        return self.left_welcome == (self.counted == "left")
+        return self.left_welcome == self.counts_left
 
     @property
     def index_label_text(self) -> str:
@@ -228,16 +233,16 @@ class Outcome(msgspec.Struct, frozen=True, kw_only=True):
 
     @property
     def event_heading_text(self) -> str:
-        return self.left_heading_text if self.counted == "left" else self.right_heading_text
+        return self.left_heading_text if self.counts_left else self.right_heading_text
 
     @property
     def other_heading_text(self) -> str:
-        return self.right_heading_text if self.counted == "left" else self.left_heading_text
+        return self.right_heading_text if self.counts_left else self.left_heading_text
 
     @property
     def event_words_text(self) -> str:
-        return self.left_words_text if self.counted == "left" else self.right_words_text
+        return self.left_words_text if self.counts_left else self.right_words_text
 
     @property
     def other_words_text(self) -> str:
-        return self.right_words_text if self.counted == "left" else self.left_words_text
+        return self.right_words_text if self.counts_left else self.left_words_text

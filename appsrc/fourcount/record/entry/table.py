@@ -2,14 +2,17 @@
 
 from __future__ import annotations
 
-from fourcount.record.entry.cell import read_cell, spaced_number
+from fourcount.record.entry.cell import read_cell
 from fourcount.record.entry.digits import specimen
 from fourcount.record.entry.percent import printed_percent, rounds_to
+from fourcount.record.entry.percent_of_total import holds_a_count, read_row
 from fourcount.record.entry.readings import Blank, Count, Fact, GroupCounts, Mark, TableReading, Unreadable
-from fourcount.record.outcome import CELLS, EventsAndOthers, Table
+from fourcount.record.entry.spaced import spaced_marks
+from fourcount.record.outcome import CELLS, EventsAndOthers, EventsOfTotal, PercentOfTotal
 
 Reading = Count | Blank | Unreadable
 Row = tuple[GroupCounts, tuple[Mark, ...]]
+Table = EventsAndOthers | EventsOfTotal | PercentOfTotal
 
 
 def read_table(table: Table) -> TableReading:
@@ -20,15 +23,25 @@ def read_table(table: Table) -> TableReading:
     that the counts do not give is marked, and the counts are used as they stand.
     """
     cells = {field: read_cell(getattr(table, field)) for field in CELLS}
-    row = _row_of_others if isinstance(table, EventsAndOthers) else _row_of_total
-    first, first_marks = row(table, cells, "first_left_text", "first_right_text")
-    second, second_marks = row(table, cells, "second_left_text", "second_right_text")
+    first, first_marks = _row(table, cells, "first_left_text", "first_right_text")
+    second, second_marks = _row(table, cells, "second_left_text", "second_right_text")
     marks = first_marks + second_marks
     marks += _percentages(table, cells, first, second, {mark.field for mark in marks})
-    marks += _spaced(table, cells, {mark.field for mark in marks})
+    marks += spaced_marks(table, cells, {mark.field for mark in marks})
     return TableReading(
         first=first, second=second, marks=tuple(sorted(marks, key=lambda mark: CELLS.index(mark.field)))
     )
+
+
+def _row(table: Table, cells: dict[str, Reading], left_field: str, right_field: str) -> Row:
+    """One group in its form. Where a percentage is used, its cell holds no count for the later steps."""
+    if isinstance(table, EventsAndOthers):
+        return _row_of_others(table, cells, left_field, right_field)
+    left_text = getattr(table, left_field)
+    if isinstance(table, EventsOfTotal) or holds_a_count(left_text):
+        return _row_of_total(table, cells, left_field, right_field)
+    cells[left_field] = Blank()
+    return read_row(left_text, getattr(table, right_field), left_field, right_field)
 
 
 def _row_of_others(table: Table, cells: dict[str, Reading], left_field: str, right_field: str) -> Row:
@@ -117,17 +130,6 @@ def _percentages(
             "total": group.total,
         }
         marks.append(Mark(field=field, key="percent-disagrees", facts=facts, used=True))
-    return tuple(marks)
-
-
-def _spaced(table: Table, cells: dict[str, Reading], marked: set[str]) -> tuple[Mark, ...]:
-    """Marks for counts that an ordinary space parts: they are used, and it is said as what."""
-    marks = []
-    for field, cell in cells.items():
-        value = spaced_number(getattr(table, field)) if isinstance(cell, Count) and field not in marked else None
-        if value is not None:
-            facts: dict[str, Fact] = {"text": specimen(getattr(table, field)), "value": value}
-            marks.append(Mark(field=field, key="read-as", facts=facts, used=True))
     return tuple(marks)
 
 
