@@ -22,8 +22,10 @@ def n_minus_1(counts: FractionalCounts) -> float | Gap:
 
     It is the square of the Miettinen-Nurminen statistics of the difference, the ratio and the odds ratio at no
     effect, so that it agrees with their intervals. Source: E. S. Pearson 1947; Campbell 2007, Stat Med 26:3661
-    (from memory).
+    (from memory). One person or fewer, as a design effect can leave, is a gap.
     """
+    if 0 < counts.total <= 1:
+        return Gap("too-few-left")
     return _chi_square_p(counts, counts.total - 1)
 
 

@@ -14,9 +14,14 @@ from fourcount.stats.results import FractionalCounts, Gap, Interval
 
 
 def exposed_fraction(ratio: float) -> float | Gap:
-    """The share of the exposed people's events: (R - 1)/R; 1 where the ratio is infinite."""
+    """The share of the exposed people's events: (R - 1)/R.
+
+    An infinite ratio is a gap: it only says that the unexposed had no event yet. Source: common practice.
+    """
     if not ratio >= 0.0:
         return Gap("not-positive", {"value": ratio})
+    if math.isinf(ratio):
+        return Gap("no-reference-events")
     return _of_ratio(ratio) if ratio >= 1.0 else Gap("ratio-below-one", {"ratio": ratio})
 
 
@@ -44,36 +49,34 @@ def prevented_fraction_interval(ratio: float, interval: Interval) -> Interval | 
 
 
 def population_fraction(counts: FractionalCounts) -> float | Gap:
-    """The share of all events in a group that is exposed as the population is: pc (R - 1)/R, pc = a/m.
+    """The share of all events in people who are exposed as the population is: pc (R - 1)/R, pc = a/m.
 
-    Miettinen's form (1974); with the table's own exposure it is Levin's, and 1 - (c/n2)/(m/N). Only a cohort or a
-    survey that was not chosen by exposure or outcome holds this share.
+    Miettinen's form (1974, from memory); with the table's own exposure it equals Levin's, and 1 - (c/n2)/(m/N). Only a
+    cohort that was chosen neither by exposure nor by outcome holds this share; a trial, whose groups somebody sized,
+    does not.
     """
     ratio = risk_ratio(counts)
-    if isinstance(ratio, Gap):
-        return ratio
-    if ratio < 1.0:
-        return Gap("ratio-below-one", {"ratio": ratio})
+    fraction = ratio if isinstance(ratio, Gap) else exposed_fraction(ratio)
+    if isinstance(fraction, Gap):
+        return fraction
     a, b, c, d = _cells(counts)
     return (a * d - b * c) / (counts.reference_total * counts.events)
 
 
 def population_fraction_interval(counts: FractionalCounts, level: float) -> Interval | Gap:
-    """The log interval 1 - (1 - F) exp(+- z sqrt((b + F(a + d)) / (N c))).
+    """The log interval: 1 - (1 - F) exp(z s) to 1 - (1 - F) exp(-z s), s^2 = (b + F(a + d))/(N c).
 
-    It holds for people sampled without regard to exposure and outcome; with no reference event it does not exist.
-    Source: Walter 1975; Fleiss 1979, Am J Epidemiol 110:103 (from memory).
+    s is the standard error of ln(1 - F) among people sampled without regard to exposure and outcome; where the sizes of
+    the groups were fixed it is too wide. Source: Walter 1975; Fleiss 1979, Am J Epidemiol 110:103 (from memory).
     """
     fraction = population_fraction(counts)
     if isinstance(fraction, Gap):
         return fraction
     a, b, c, d = _cells(counts)
-    if c == 0:
-        return Gap("no-reference-events")
     variance = (b + fraction * (a + d)) / (counts.total * c)
     if variance == 0.0:
         return Gap("zero-width")
-    left = counts.reference_events * counts.total / (counts.reference_total * counts.events)
+    left = c * counts.total / (counts.reference_total * counts.events)
     half_width = quantile(level) * math.sqrt(variance)
     return Interval(low=1.0 - left * math.exp(half_width), high=1.0 - left * math.exp(-half_width))
 
@@ -108,7 +111,5 @@ def _of_ratio(ratio: float) -> float:
 def _levin(prevalence: float, ratio: float) -> float:
     if math.isinf(ratio):
         return 1.0 if prevalence > 0.0 else 0.0
-    if prevalence == 1.0:
-        return _of_ratio(ratio)
     excess = prevalence * (ratio - 1.0)
-    return excess / (1.0 + excess)
+    return excess / (1.0 + excess) if excess > -1.0 else -math.inf

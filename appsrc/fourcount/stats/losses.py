@@ -7,6 +7,7 @@ Source: Akl and others 2012, BMJ 344:e2809.
 
 from __future__ import annotations
 
+import math
 from dataclasses import dataclass
 from typing import Literal
 
@@ -22,7 +23,7 @@ the observed direction; ``best``: the opposite; ``ratio``: the lost had k times 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Lost:
-    """The people lost in each group, and the ratio k of their risk to that of those followed, from 0 upwards."""
+    """The people lost in each group, and the ratio k of their risk to that of those followed, 0 or more."""
 
     index: int
     reference: int
@@ -42,7 +43,7 @@ def imputed(counts: Counts, lost: Lost, scenario: Scenario) -> FractionalCounts 
     if gap is not None:
         return gap
     if scenario == "ratio":
-        return _by_ratio(counts, lost)
+        return _by_ratio(counts, lost) if _usable(lost) else Gap("loss-ratio-out-of-range")
     index_all, reference_all = _who(counts, lost, scenario)
     return _put_back(counts, lost, lost.index if index_all else 0, lost.reference if reference_all else 0)
 
@@ -88,6 +89,10 @@ def _put_back(counts: Counts, lost: Lost, index_events: int, reference_events: i
         reference_events=counts.reference_events + reference_events,
         reference_non_events=counts.reference_non_events + lost.reference - reference_events,
     )
+
+
+def _usable(lost: Lost) -> bool:
+    return all(0.0 <= ratio < math.inf for ratio in (lost.index_ratio, lost.reference_ratio))
 
 
 def _by_ratio(counts: Counts, lost: Lost) -> FractionalCounts:

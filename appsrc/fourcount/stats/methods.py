@@ -13,6 +13,7 @@ from __future__ import annotations
 from fourcount.stats.entries.association_tests import ASSOCIATION_TESTS
 from fourcount.stats.entries.comparisons import DIFFERENCE_METHODS, RATIO_METHODS
 from fourcount.stats.entries.entry import Family, HomogeneityEntry, Measure, Method, PairFamily, RateFamily, Test
+from fourcount.stats.entries.extras import EXTRAS
 from fourcount.stats.entries.odds_ratios import ODDS_RATIO_METHODS
 from fourcount.stats.entries.pairs import PAIR_METHODS, PAIR_TESTS
 from fourcount.stats.entries.rates import RATE_METHODS, RATE_TESTS
@@ -22,6 +23,7 @@ from fourcount.stats.entries.timed import TIMED_METHODS
 from fourcount.stats.results import Counts
 
 __all__ = [
+    "EXTRAS",
     "FAMILIES",
     "HOMOGENEITY_TESTS",
     "METHODS",

@@ -37,12 +37,13 @@ GAP_KEYS = (
     "too-few-left",  # divided by the design effect, no more than one person is left in the whole table
     "ratio-below-one",  # the exposed fare better: there is no share of events that the exposure explains
     "ratio-above-one",  # the exposed fare worse: there is no share of events that the exposure prevents
-    "no-reference-events",  # without an event among the unexposed the fraction's log interval does not exist
+    "no-reference-events",  # an infinite ratio only says that the unexposed had no event: no share of events follows
     "endless-log",  # a ratio of 0 or without end has no logarithm, and the formula needs one
     "endless-limit",  # a limit without end gives no standard error
     "p-out-of-range",  # a p that is 0, 1 or beyond gives no standard error
     "estimate-at-no-effect",  # an estimate at no effect has the p of 1 whatever its standard error is
     "level-not-printed",  # limits printed at one level give none at another
+    "loss-ratio-out-of-range",  # the ratio of the risk among the lost is 0 or more
     "prevalence-out-of-range",  # the share of people exposed lies from 0 to 1
 )
 """Every reason for which a function of this folder gives no figure."""
