@@ -16,3 +16,12 @@ METHOD_KEYS = {
     },
 }
 TEST_KEYS = ("fisher", "fisher-mid-p", "pearson", "n-minus-1")
+
+POOLED_METHOD_KEYS = {
+    "pooled_risk_difference": {"sato", "greenland-robins"},
+    "pooled_risk_ratio": {"greenland-robins"},
+    "pooled_odds_ratio": {"robins-breslow-greenland"},
+}
+TIMED_METHOD_KEYS = {"timed_difference": {"square-and-add"}, "timed_ratio": {"square-and-add"}}
+STRATA_TEST_KEYS = ("cmh", "cmh-corrected")
+HOMOGENEITY_TEST_KEYS = ("breslow-day", "breslow-day-tarone")

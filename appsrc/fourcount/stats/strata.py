@@ -30,6 +30,8 @@ __all__ = [
     "sato_difference",
 ]
 
+_LARGEST_LOG = 709.0  # of what exp still gives
+
 
 def pooled_odds_ratio(strata: Sequence[Counts]) -> float | Gap:
     """The odds ratio that the strata share: sum(ad/N) / sum(bc/N); ``inf`` where only the latter is 0.
@@ -106,8 +108,6 @@ def greenland_robins_ratio(strata: Sequence[Counts], level: float) -> Interval |
         / (t.total * t.total)
         for t in compared
     )
-    if parts == 0.0:
-        return Gap("zero-width")
     return _around_ratio(index / reference, quantile(level) * math.sqrt(parts / index / reference))
 
 
@@ -209,15 +209,20 @@ def _spread(compared: Sequence[Counts]) -> float:
     )
 
 
-def _around_ratio(centre: float, log_half_width: float) -> Interval:
-    return Interval(low=centre * math.exp(-log_half_width), high=centre * math.exp(log_half_width))
+def _around_ratio(centre: float, log_half_width: float) -> Interval | Gap:
+    """Limits beyond the range of doubles (strata of 10^9 that contradict each other) are 0 and ``inf``."""
+    high = centre * math.exp(log_half_width) if log_half_width < _LARGEST_LOG else math.inf
+    return _with_width(centre * math.exp(-log_half_width), high)
 
 
 def _around_difference(centre: float, variance: float, level: float) -> Interval | Gap:
-    if variance <= 0.0:
-        return Gap("zero-width")
-    half_width = quantile(level) * math.sqrt(variance)
-    return Interval(low=centre - half_width, high=centre + half_width)
+    half_width = quantile(level) * math.sqrt(max(0.0, variance))
+    return _with_width(centre - half_width, centre + half_width)
+
+
+def _with_width(low: float, high: float) -> Interval | Gap:
+    """A width of 0, or one that is lost in the last digit of a double, is no interval."""
+    return Interval(low=low, high=high) if low < high else Gap("zero-width")
 
 
 def _common_association(strata: Sequence[Counts], *, correction: float) -> float | Gap:
