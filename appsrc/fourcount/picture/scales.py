@@ -4,10 +4,11 @@ from __future__ import annotations
 
 from collections.abc import Iterable
 from dataclasses import dataclass
-from math import isfinite, log
+from math import floor, isfinite, log, log10
 
 RISK_ENDS = (0.001, 0.0025, 0.005, 0.01, 0.025, 0.05, 0.1, 0.25, 0.5, 1.0)
 DIFFERENCE_ENDS = (0.001, 0.0025, 0.005, 0.01, 0.025, 0.05, 0.1, 0.15, 0.25, 0.5, 1.0)
+RATE_STEPS = (1.0, 1.5, 2.5, 5.0, 10.0)
 RATIO_ENDS = (2.0, 4.0, 10.0, 50.0, 100.0)
 
 
@@ -40,6 +41,25 @@ def difference_scale(values: Iterable[float]) -> Scale:
     reach = max((abs(value) for value in values), default=0.0)
     end = next((end for end in DIFFERENCE_ENDS if reach <= end), 1.0)
     return Scale(low=-end, high=end, no_effect=0.0)
+
+
+def rate_scale(values: Iterable[float]) -> Scale:
+    """From 0 to the least round rate that holds all of them, in the unit in which they are shown."""
+    return Scale(low=0.0, high=_round_up(max((value for value in values if isfinite(value)), default=0.0)))
+
+
+def rate_difference_scale(values: Iterable[float]) -> Scale:
+    """Symmetric about no difference, up to the least round difference of rates that holds all of them."""
+    end = _round_up(max((abs(value) for value in values if isfinite(value)), default=0.0))
+    return Scale(low=-end, high=end, no_effect=0.0)
+
+
+def _round_up(value: float) -> float:
+    """The least of 1, 1.5, 2.5, 5 and 10 times a power of ten that holds a value; 1 for nothing."""
+    if value <= 0:
+        return 1.0
+    power = 10.0 ** floor(log10(value))
+    return next((step * power for step in RATE_STEPS if value <= step * power), 10 * power)
 
 
 def ratio_scale(values: Iterable[float]) -> Scale:

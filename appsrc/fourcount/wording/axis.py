@@ -15,4 +15,8 @@ def axis_words(kind: str, end: float) -> tuple[str, str, str]:
         return f"{reach} fewer", "0", f"{reach} more"
     if kind == "ratio":
         return RATIO_ENDS[end], "fewer | more", numbers.whole(int(end))
+    if kind == "rate_difference":
+        return f"{numbers.quantity(end)} fewer", "0", f"{numbers.quantity(end)} more"
+    if kind == "rate":
+        return "0", "", numbers.quantity(end)
     return "0", "", numbers.percent_given(end)

@@ -9,6 +9,7 @@ from fourcount.record.outcome import Column, Effect, Outcome
 
 Group = Literal["index", "reference"]
 
+WITH_DESIGNS = ("trial", "paired")  # people had what the group is called after
 STAND_INS = {"index": "index group", "reference": "reference group"}
 EVENT_STAND_IN = "had the event"
 COLUMN_STAND_INS: dict[Column, str] = {"left": EVENT_STAND_IN, "right": "did not have the event"}
@@ -57,11 +58,13 @@ def labelled(outcome: Outcome, group: Group) -> bool:
 
 
 def in_group(outcome: Outcome, group: Group) -> str:
-    """A group after "people": "with usual care" in a trial, elsewhere a form that fits any noun."""
+    """A group after "people": "with usual care" in a trial or a crossover, elsewhere a form that fits any noun."""
     if not labelled(outcome, group):
         return f"in the {STAND_INS[group]}"
-    if outcome.design == "trial":
+    if outcome.design in WITH_DESIGNS:
         return f"with {label_within(outcome, group)}"
+    if outcome.design == "before-after":
+        return f"in the period “{label(outcome, group)}”"
     return f"in the group “{label(outcome, group)}”"
 
 

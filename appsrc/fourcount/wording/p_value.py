@@ -17,11 +17,12 @@ TESTED: dict[Form, str] = {
     "person-time": "equal rates",
     "strata": "no association within the strata",
 }
+WITH = " with "
 EQUAL_RATES = " of equal rates"
 BY_TEST = "{p} by the {title} of {tested}, two-sided."
 RECOVERED = "{p}, two-sided, as the printed figures have it on the normal scale."
 ONE_FOR_ALL = (
-    "Whether one odds ratio may hold in all strata: {p} by the {title} test (chi-square {chi_square} on {degrees}). "
+    "Whether one odds ratio may hold in all strata: {p} by the {title} (chi-square {chi_square} on {degrees}). "
     "A small p speaks against it; a large one does not show it."
 )
 PRINTED = ("printed", "recovered")
@@ -46,15 +47,19 @@ def p_sentence(findings: OutcomeFindings) -> str:
 
 def test_title(key: str) -> str:
     """A test's name inside a sentence, with the word "test" behind it."""
-    title = test(key).title
+    title = _with_test(test(key).title)
     if not title.startswith(("Score ", "Conditional ")):
-        return f"{title} test"
-    named = title.removesuffix(EQUAL_RATES)
-    named = f"{named[:1].lower()}{named[1:]}"
-    return named if named.endswith("test") else f"{named} test"
+        return title
+    return f"{title[:1].lower()}{title[1:]}"
 
 
 test_title.__test__ = False  # type: ignore[attr-defined]  # pytest would collect a function of this name
+
+
+def _with_test(title: str) -> str:
+    """The word "test" behind the test's own name, before what it is done with."""
+    name, link, rest = title.removesuffix(EQUAL_RATES).partition(WITH)
+    return f"{name}{'' if name.endswith('test') else ' test'}{link}{rest}"
 
 
 def clause(sentence: str) -> str:
@@ -82,7 +87,7 @@ def homogeneity_sentence(found: Homogeneity) -> str:
     word = "degree" if found.degrees == 1 else "degrees"
     return ONE_FOR_ALL.format(
         p=numbers.p_phrase(found.p),
-        title=homogeneity_test(found.method).title,
+        title=_with_test(homogeneity_test(found.method).title),
         chi_square=numbers.fixed(found.chi_square, 2),
         degrees=f"{found.degrees} {word} of freedom",
     )

@@ -84,10 +84,9 @@ def _effect(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
 
 def _strata(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     """The pooled difference, or the pooled odds ratio where there is none, beside the crude figure."""
-    for key, claim in (
-        ("pooled_risk_difference", strata.difference_claim),
-        ("pooled_odds_ratio", strata.odds_ratio_claim),
-    ):
+    by_odds = ("pooled_odds_ratio", strata.odds_ratio_claim)
+    claims = (("pooled_risk_difference", strata.difference_claim), by_odds)
+    for key, claim in (by_odds,) if outcome.design == "case-control" else claims:
         figure = measure_of(key, findings)
         if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
             return " ".join(filter(None, (f"{claim(outcome, figure, choices)}.", strata.crude_text(key, findings))))

@@ -19,11 +19,11 @@ def rates_headline(outcome: Outcome, figures: tuple[Figure, Figure, Figure], rat
     reference, index, difference = figures
     per = per_units(rates)
     first, second = (
-        numbers.rate((0.0 if isinstance(figure.estimate, Gap) else figure.estimate) * per)
-        for figure in (reference, index)
+        0.0 if isinstance(figure.estimate, Gap) else figure.estimate * per for figure in (reference, index)
     )
     groups = names.sentence_case(names.in_group(outcome, "reference")), names.in_group(outcome, "index")
-    said = f"{groups[0]} there were {first} {_events(outcome)} per {unit_sum(per, outcome)}; {groups[1]} {second}."
+    one, other = numbers.rate(first) if first else "no", numbers.rate(second) if second else "none"
+    said = f"{groups[0]} there were {one} {_events(outcome)} per {unit_sum(per, outcome)}; {groups[1]} {other}."
     return f"{said} {_change(difference, per, choices)}"
 
 

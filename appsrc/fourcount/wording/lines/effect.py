@@ -32,5 +32,5 @@ def effect_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) 
     per = PER_UNIT[printed.unit] if key == "rate_difference" else 1
     unit = {"difference": "per 100, ", "rate_difference": f"per {per:,} of person-time, "}.get(KINDS.get(key, ""), "")
     detail = f"{unit}{method_word(measure.method, choices)}{adjusted_words(outcome, printed)}"
-    notes = (FROM_P if rebuilt else "", relative_note(measure) if KINDS.get(key) == "ratio" else "")
+    notes = (FROM_P if rebuilt else "", relative_note(measure) if key in ("risk_ratio", "rate_ratio") else "")
     return (figure_line(key, name, measure, detail=detail, notes=notes, per=per),)

@@ -49,9 +49,10 @@ def _counts(key: str, rates: Rates, outcome: Outcome) -> str:
     """The unit in which a figure is told, with the events and the time behind a single rate."""
     if key == "rate_ratio":
         return ""
-    per = unit_sum(per_units(rates), outcome)
+    per = per_units(rates)
     if key == "rate_difference":
-        return f"per {per}, "
+        return f"per {unit_sum(per, outcome)}, "
     index = key == "rate_index"
     events, time = (rates.index_events, rates.index_time) if index else (rates.reference_events, rates.reference_time)
-    return f"per {per}; {numbers.whole(events)} in {time_in(time, outcome)}, "
+    told = numbers.whole(per) if per > 1 else unit_sum(per, outcome)
+    return f"per {told}; {numbers.whole(events)} in {time_in(time, outcome)}, "

@@ -38,10 +38,12 @@ CASE_CONTROL_ORDER = ("pooled_odds_ratio", "odds_ratio", *(key for key in ORDER 
 CRUDE = "{name}, crude"
 POOLED = "{name}, pooled"
 PARTS = (
-    "the crude one lies more than a tenth away from it, or on the other side of no effect, as confounding by what "
-    "parts the strata makes it"
+    "the crude one lies more than a tenth away from it, or on the other side of no effect: confounding by what the "
+    "strata differ in can do that"
 )
-ODDS_PART = "an odds ratio can do so without any confounding: judge by the difference or the risk ratio"
+ODDS_PART = (
+    "an odds ratio can do it without any confounding, so judge by the difference or the risk ratio if there is one"
+)
 STRATUM_KEY = "stratum."
 
 
