@@ -63,7 +63,7 @@ EXTRAS = (
     Calculation(
         key="fragility",
         title="Fragility index",
-        formula="The fewest events added to the group with the lower risk, its size fixed, that bring Fisher’s p to 0.05",
+        formula="The fewest events to add to the group with the lower risk, its size fixed, until Fisher’s p is 0.05",
         source="Walsh and others 2014, J Clin Epidemiol 67:622",
         note="To be read beside the number lost to follow-up.",
     ),
