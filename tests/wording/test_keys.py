@@ -11,6 +11,7 @@ from fourcount.appraisal.findings import GAP_KEYS as APPRAISAL_KEYS
 from fourcount.appraisal.findings import Caution
 from fourcount.record.entry.cell import read_cell
 from fourcount.record.entry.level import read_level
+from fourcount.record.entry.printed import PAPER_MARKS
 from fourcount.record.entry.readings import Mark, Unreadable
 from fourcount.record.entry.risk import read_risk
 from fourcount.stats.results import GAP_KEYS, Gap
@@ -18,6 +19,21 @@ from fourcount.wording import cautions, gaps
 from fourcount.wording.facts import LONGEST_QUOTE
 
 MARK_KEYS = (
+    *PAPER_MARKS,
+    "percent-several",
+    "percent-none",
+    "percent-below",
+    "not-a-percent",
+    "not-a-time",
+    "negative-time",
+    "time-disagrees",
+    "units-differ",
+    "not-limits",
+    "limits-disordered",
+    "not-an-amount",
+    "negative-amount",
+    "icc-out-of-range",
+    "cluster-too-small",
     "not-a-count",
     "negative",
     "decimal",

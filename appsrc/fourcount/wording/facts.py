@@ -41,6 +41,12 @@ STAND_INS = {
     "total": "another number",
     "typed": "one number",
     "limit": "1,000,000,000",
+    "counts": "several counts",
+    "unit": "another unit",
+    "low": "the lower one",
+    "high": "the upper one",
+    "estimate": "the estimate",
+    "p": "it",
     "side": "one side",
     "label": "comparison",
 }
@@ -97,8 +103,10 @@ def _design_name(key: str) -> str:
     return labels.DESIGNS.get(key, key)
 
 
-NUMERIC = frozenset({"baseline", "study", "risk", "odds_ratio", "risk_ratio", "value", "count"})
+NUMERIC = frozenset({"typed", "total", "baseline", "study", "risk", "odds_ratio", "risk_ratio", "value", "count"})
 WRITERS: dict[str, Callable[..., str]] = {
+    "typed": numbers.quantity,
+    "total": numbers.quantity,
     "baseline": numbers.percent_given,
     "study": numbers.percent,
     "risk": numbers.percent,

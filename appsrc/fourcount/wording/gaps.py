@@ -5,6 +5,9 @@ from __future__ import annotations
 from fourcount.record.entry.readings import Mark, Unreadable
 from fourcount.stats.results import Gap
 from fourcount.wording.facts import told
+from fourcount.wording.marks import MARK_TEXTS
+
+__all__ = ["GAP_TEXTS", "LIMIT_TEXTS", "MARK_TEXTS", "gap_text", "limit_text", "mark_text"]
 
 GAP_TEXTS = {
     # the numbers themselves
@@ -40,6 +43,7 @@ GAP_TEXTS = {
     "ratio-above-one": "The group exposed fared worse, so there is no share of events that the exposure prevents.",
     "no-reference-events": "Nobody in the reference group had the event, where the bare formula has no interval.",
     "prevalence-out-of-range": "The share of people exposed lies from 0% to 100%.",
+    "loss-ratio-out-of-range": "The ratio of risks among the lost is a number from 0 upwards.",
     "endless-log": "An estimate or a limit is 0 or infinite, where its logarithm has no end.",
     "endless-limit": "A limit is infinite, so no standard error follows from it.",
     "p-out-of-range": "A p lies above 0 and goes up to 1.",
@@ -98,23 +102,6 @@ LIMIT_TEXTS = {
 
 UNKNOWN_GAP = "This figure cannot be given."
 
-MARK_TEXTS = {
-    "not-a-count": "{text}: a whole number of people is needed, such as 38",
-    "negative": "{text}: a count cannot be negative",
-    "decimal": "{text}: people are counted whole, without decimals",
-    "point-in-thousands": "{text}: people are counted whole; a thousands mark is a comma, as in {comma}",
-    "two-counts": "{text}: one count in each cell",
-    "too-large": "{text}: a count goes up to {limit}",
-    "events-above-total": "{text}: more events than people; the events have to fit into the total",
-    "total-disagrees": "{text}: the total here is {typed}, but the group’s total is {total}; check the paper",
-    "percent-disagrees": "{text}: {events} of {total} does not round to this percentage; the count is used",
-    "read-as": "{text}: read as {value}; two counts need two cells",
-    "not-a-risk": "{text}: a risk is needed, such as 12% or 12 in 100",
-    "percent-or-fraction": "{text}: this could be a percentage or a fraction; write it with its sign, such as 12%",
-    "risk-out-of-range": "{text}: a risk lies between 0% and 100%",
-    "not-a-level": "{text}: a confidence level is needed, such as 95%",
-    "level-out-of-range": "{text}: a confidence level here lies between 80% and 99.9%",
-}
 UNKNOWN_MARK = "{text}: this cannot be read"
 
 

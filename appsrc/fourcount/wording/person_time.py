@@ -5,6 +5,7 @@ from __future__ import annotations
 import re
 
 from fourcount.appraisal.findings import Rates
+from fourcount.record.entry.person_time import read_person_time
 from fourcount.record.outcome import Outcome, PersonTime
 from fourcount.wording import names, numbers
 
@@ -15,8 +16,8 @@ POWERS = (1, 100, 1_000, 10_000, 100_000, 1_000_000, 10_000_000, 100_000_000, 1_
 
 
 def unit(outcome: Outcome) -> str:
-    """The unit of person-time as typed, in the plural: "person-years"."""
-    typed = names.bare(outcome.table.unit_text) if isinstance(outcome.table, PersonTime) else ""
+    """The unit of person-time as it is read, in the plural: "person-years"."""
+    typed = names.bare(read_person_time(outcome.table).unit) if isinstance(outcome.table, PersonTime) else ""
     return SINGULAR.sub(r"\1s", typed) or UNIT_STAND_IN
 
 
