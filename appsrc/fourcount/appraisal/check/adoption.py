@@ -8,10 +8,18 @@ from typing import cast
 from fourcount.appraisal.check.search import Hit, has_limits
 from fourcount.record.entry.readings import PrintedFigure
 from fourcount.record.paper import HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family
-from fourcount.stats.methods import FAMILIES
+from fourcount.stats.methods import FAMILIES, PAIR_FAMILIES, RATE_FAMILIES
 
 Adopted = tuple[str, float]
 _ORDER: tuple[Family, ...] = ("textbook", "score", "exact")  # papers usually print the textbook family
+
+_ALIKE = {
+    "pooled_risk_difference": "sato",
+    "pooled_risk_ratio": "greenland-robins",
+    "pooled_odds_ratio": "robins-breslow-greenland",
+    "timed_difference": "square-and-add",
+    "timed_ratio": "square-and-add",
+}
 
 
 def adoption(found: Iterable[tuple[PrintedFigure, tuple[Hit, ...]]], choices: Choices) -> Adopted | None:
@@ -36,8 +44,13 @@ def _told(hits: tuple[Hit, ...]) -> set[tuple[str, str, float]]:
     return {
         (hit.candidate.measure, hit.match.method, hit.match.level)
         for hit in hits
-        if hit.match.fit == "all" and hit.candidate.orientation == "as-read" and not hit.candidate.heavy
+        if hit.match.fit == "all" and hit.candidate.orientation == "as-read" and _shown(hit)
     }
+
+
+def _shown(hit: Hit) -> bool:
+    """Whether the window shows this very estimate: neither a conditional one nor that of an analysis it refuses."""
+    return not hit.candidate.heavy and not hit.candidate.key.startswith(("unpaired", "crude"))
 
 
 def _holds(ways: set[tuple[str, str, float]], family: str, level: float) -> bool:
@@ -45,5 +58,9 @@ def _holds(ways: set[tuple[str, str, float]], family: str, level: float) -> bool
 
 
 def method_of(family: str, measure: str) -> str | None:
-    """The method by which a family gives a measure; None where it has none."""
-    return cast("str | None", getattr(FAMILIES[family], measure, None))
+    """The method by which a family gives a measure; all families pool strata and join printed limits alike."""
+    if measure.startswith("pair_"):
+        return cast("str | None", getattr(PAIR_FAMILIES[family], measure.removeprefix("pair_"), None))
+    if measure.startswith("rate"):
+        return cast("str | None", getattr(RATE_FAMILIES[family], measure.removeprefix("rate_"), None))
+    return _ALIKE.get(measure) or cast("str | None", getattr(FAMILIES[family], measure, None))

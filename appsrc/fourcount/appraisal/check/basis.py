@@ -2,20 +2,21 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
+from collections.abc import Callable, Iterable
 from dataclasses import dataclass, field
 
 from fourcount.appraisal.check.candidate import Candidate
+from fourcount.appraisal.check.other_forms import apart, paired, person_time, stratified, timed
 from fourcount.appraisal.check.percentages import Group
 from fourcount.appraisal.check.probability import Tested
 from fourcount.appraisal.check.search import NEVER_FROM
 from fourcount.appraisal.check.unpaired import unpaired
-from fourcount.appraisal.findings import OutcomeFindings
+from fourcount.appraisal.findings import OutcomeFindings, StrataFindings
 from fourcount.record.entry.readings import PrintedMeasure
 from fourcount.stats.entries.entry import Test
 from fourcount.stats.entries.print_only import PRINT_TESTS
-from fourcount.stats.methods import TESTS
-from fourcount.stats.results import Counts
+from fourcount.stats.methods import PAIR_TESTS, RATE_TESTS, STRATA_TESTS, TESTS
+from fourcount.stats.results import Counts, PairCounts, Rates, TimedRisks
 
 _CONDITIONAL_TESTS = frozenset({"fisher", "fisher-mid-p"})
 _USUAL_TESTS = ("pearson", "fisher", "yates")  # what papers usually print is named first
@@ -33,9 +34,16 @@ class Basis:
 
 def basis_of(findings: OutcomeFindings) -> Basis:
     """What these findings rest on."""
+    if isinstance(findings.strata, StrataFindings) and isinstance(findings.counts, Counts):
+        return of_strata(tuple(stratum.counts for stratum in findings.strata.strata), findings.counts)
     if isinstance(findings.counts, Counts):
         return of_counts(findings.counts)
-    return Basis()
+    given = findings.given
+    if isinstance(given, PairCounts):
+        return of_pairs(given)
+    if isinstance(given, Rates):
+        return of_rates(given)
+    return Basis(candidates=lambda says: timed(given, says)) if isinstance(given, TimedRisks) else Basis()
 
 
 def of_counts(counts: Counts) -> Basis:
@@ -49,8 +57,43 @@ def of_counts(counts: Counts) -> Basis:
     )
 
 
+def of_pairs(pairs: PairCounts) -> Basis:
+    """The four counts of matched pairs."""
+    people = apart(pairs)
+    return Basis(
+        candidates=lambda says: paired(pairs, says),
+        tests=lambda: _all_tests(PAIR_TESTS, pairs),
+        largest=max(pairs.both, pairs.index_only, pairs.reference_only, pairs.neither),
+        groups=((people.index_events, pairs.total), (people.reference_events, pairs.total)),
+    )
+
+
+def of_rates(rates: Rates) -> Basis:
+    """Events and person-time."""
+    return Basis(
+        candidates=lambda says: person_time(rates, says),
+        tests=lambda: _all_tests(RATE_TESTS, rates),
+        largest=max(rates.index_events, rates.reference_events),
+    )
+
+
+def of_strata(strata: tuple[Counts, ...], crude: Counts) -> Basis:
+    """Several tables, and all of them thrown together."""
+    whole = of_counts(crude)
+    return Basis(
+        candidates=lambda says: stratified(strata, crude, says),
+        tests=lambda: _all_tests(STRATA_TESTS, strata) + whole.tests(),
+        largest=whole.largest,
+        groups=whole.groups,
+    )
+
+
 def _tested(counts: Counts, *, conditional: bool) -> tuple[Tested, ...]:
-    entries: list[Test] = [test for test in TESTS + PRINT_TESTS if conditional or test.key not in _CONDITIONAL_TESTS]
+    entries = [test for test in TESTS + PRINT_TESTS if conditional or test.key not in _CONDITIONAL_TESTS]
     entries.sort(key=lambda test: _USUAL_TESTS.index(test.key) if test.key in _USUAL_TESTS else len(_USUAL_TESTS))
-    found = ((test.key, test.p(counts)) for test in entries)
+    return _all_tests(entries, counts)
+
+
+def _all_tests(entries: Iterable[Test], given: object) -> tuple[Tested, ...]:
+    found = ((test.key, test.p(given)) for test in entries)
     return tuple(Tested(key=key, p=p) for key, p in found if isinstance(p, float))

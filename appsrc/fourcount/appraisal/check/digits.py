@@ -57,7 +57,7 @@ def within_one(value: Number, printed: PrintedNumber) -> bool:
     if not _finite(value):
         return False
     units = last_digits(printed)
-    return bool(abs(value * units_in_one(printed) - units) <= 1.5 + _TIE * max(1.0, abs(units)))
+    return abs(float(value * units_in_one(printed)) - units) <= 1.5 + _TIE * max(1.0, abs(units))
 
 
 def exchanged(printed: PrintedNumber) -> tuple[PrintedNumber, ...]:
@@ -95,9 +95,9 @@ def _finite(value: Number) -> bool:
 
 def _in_units(value: Number, printed: PrintedNumber) -> Number | None:
     """The value's size in units of the last printed digit; None where its sign is not the printed one's."""
-    if not _finite(value):
-        return None
     units = last_digits(printed)
-    if units and (value < 0) != (units < 0):
+    if not _finite(value) or (units and (value < 0) != (units < 0)):
         return None
+    if isinstance(value, Fraction):
+        return abs(value) * units_in_one(printed)
     return abs(value) * units_in_one(printed)
