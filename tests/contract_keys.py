@@ -17,6 +17,20 @@ METHOD_KEYS = {
 }
 TEST_KEYS = ("fisher", "fisher-mid-p", "pearson", "n-minus-1")
 
+PAIR_METHOD_KEYS = {
+    "pair_difference": {"newcombe", "tango", "wald"},
+    "pair_ratio": {"bonett-price", "log"},
+    "pair_odds_ratio": {"conditional-exact", "conditional-mid-p", "log"},
+}
+PAIR_TEST_KEYS = ("mcnemar-exact", "mcnemar-mid-p", "mcnemar", "mcnemar-corrected")
+
+RATE_METHOD_KEYS = {
+    "rate": {"exact", "mid-p", "score", "wald"},
+    "rate_difference": {"miettinen-nurminen", "wald"},
+    "rate_ratio": {"exact", "mid-p", "score", "log"},
+}
+RATE_TEST_KEYS = ("binomial-exact", "binomial-mid-p", "rate-score")
+
 POOLED_METHOD_KEYS = {
     "pooled_risk_difference": {"sato", "greenland-robins"},
     "pooled_risk_ratio": {"greenland-robins"},

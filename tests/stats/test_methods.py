@@ -9,10 +9,18 @@ from collections.abc import Callable
 
 import pytest
 
-from contract_keys import METHOD_KEYS, TEST_KEYS
+from contract_keys import (
+    METHOD_KEYS,
+    PAIR_METHOD_KEYS,
+    PAIR_TEST_KEYS,
+    RATE_METHOD_KEYS,
+    RATE_TEST_KEYS,
+    TEST_KEYS,
+)
 from fourcount.stats import methods
 from fourcount.stats.entries.entry import Method
-from fourcount.stats.results import GAP_KEYS, Counts, Gap, Interval
+from fourcount.stats.results import GAP_KEYS, Counts, Gap, Interval, PairCounts, Rates
+from paired_tables import EXTREME_RATES, pairs_of, rates_of
 
 Table = Callable[..., Counts]
 
@@ -20,6 +28,7 @@ CELLS = (0, 1, 2, 5, 10**9)
 LEVELS = (0.8, 0.95, 0.999)
 CONDITIONAL = {"baptista-pike-mid-p", "conditional-exact", "conditional-mid-p"}
 UNCONDITIONAL = [entry for entry in methods.METHODS if entry.key not in CONDITIONAL]
+SHARED = (*methods.PAIR_METHODS, *methods.RATE_METHODS, *methods.PAIR_TESTS, *methods.RATE_TESTS)
 
 WITHOUT_NUMPY = """
 import sys
@@ -38,12 +47,19 @@ print(sorted({name.split(".")[0] for name in sys.modules} & {"numpy", "scipy", "
 
 def test_the_keys_are_those_that_other_programs_read() -> None:
     """Each measure has exactly the methods of the JSON contract, each key once."""
-    listed = [(entry.measure, entry.key) for entry in methods.METHODS]
-    assert sorted(listed) == sorted((measure, key) for measure, keys in METHOD_KEYS.items() for key in keys)
-    assert [entry.key for entry in methods.TESTS] == list(TEST_KEYS)
+    for entries, by_measure in (
+        (methods.METHODS, METHOD_KEYS),
+        (methods.PAIR_METHODS, PAIR_METHOD_KEYS),
+        (methods.RATE_METHODS, RATE_METHOD_KEYS),
+    ):
+        listed = [(entry.measure, entry.key) for entry in entries]
+        assert sorted(listed) == sorted((measure, key) for measure, keys in by_measure.items() for key in keys)
+    assert tuple(entry.key for entry in methods.TESTS) == TEST_KEYS
+    assert tuple(entry.key for entry in methods.PAIR_TESTS) == PAIR_TEST_KEYS
+    assert tuple(entry.key for entry in methods.RATE_TESTS) == RATE_TEST_KEYS
 
 
-@pytest.mark.parametrize("entry", [*methods.METHODS, *methods.TESTS], ids=lambda entry: entry.title)
+@pytest.mark.parametrize("entry", [*methods.METHODS, *methods.TESTS, *SHARED], ids=lambda entry: entry.title)
 def test_every_entry_says_what_it_is(entry: Method) -> None:
     """Title, formula, source with a year, and note are there."""
     for text in (entry.title, entry.formula, entry.source, entry.note):
@@ -62,6 +78,22 @@ def test_families_name_entries_of_the_table() -> None:
             assert (found.measure, found.key) == (measure, key)
         assert methods.method("risk", family.odds).key == family.odds
         assert methods.test(family.test).key == family.test
+
+
+def test_families_of_pairs_and_of_rates_name_entries_of_the_table() -> None:
+    """Each key of each family is found; a side of pairs has the methods of any single risk."""
+    assert set(methods.PAIR_FAMILIES) == set(methods.RATE_FAMILIES) == set(methods.FAMILIES)
+    for pair_family in methods.PAIR_FAMILIES.values():
+        for measure in PAIR_METHOD_KEYS:
+            key = getattr(pair_family, measure.removeprefix("pair_"))
+            assert methods.method(measure, key) in methods.PAIR_METHODS
+        assert methods.method("pair_risk", pair_family.risk) is methods.method("risk", pair_family.risk)
+        assert methods.test(pair_family.test) in methods.PAIR_TESTS
+    for rate_family in methods.RATE_FAMILIES.values():
+        for measure in RATE_METHOD_KEYS:
+            key = getattr(rate_family, measure.removeprefix("rate_"))
+            assert methods.method(measure, key) in methods.RATE_METHODS
+        assert methods.test(rate_family.test) in methods.RATE_TESTS
 
 
 def test_a_key_that_is_not_there_is_an_error() -> None:
@@ -124,3 +156,58 @@ def test_only_the_exact_family_is_slow_and_only_among_many(table: Table) -> None
     small, large = table(10**7, 5, 5, 5), table(5, 5, 10**7 + 1, 5)
     assert [methods.slow(large, family) for family in ("score", "textbook", "exact")] == [False, False, True]
     assert not methods.slow(small, "exact")
+
+
+def _ask_shared(entry: Method | methods.Test, counts: PairCounts | Rates, level: float) -> Interval | Gap | float:
+    """An interval or a p of pairs or rates; a single rate is that of the index group."""
+    if isinstance(entry, methods.Test):
+        return entry.p(counts)
+    if entry.measure == "rate":
+        assert isinstance(counts, Rates)
+        return entry.interval(counts.index_events, counts.index_time, level)
+    return entry.interval(counts, level)
+
+
+def _name(entry: Method | methods.Test) -> str:
+    return entry.title
+
+
+@pytest.mark.parametrize("entry", SHARED, ids=_name)
+def test_every_small_and_extreme_table_of_pairs_and_of_rates_has_an_answer(entry: Method | methods.Test) -> None:
+    """0, 1, 2, 5 and 10^9 pairs or events, tiny and huge person-time: an ordered interval, a p, or a listed gap."""
+    of_pairs = entry in (*methods.PAIR_METHODS, *methods.PAIR_TESTS)
+    tables = itertools.product(CELLS, repeat=4) if of_pairs else iter(EXTREME_RATES)
+    for table in tables:
+        answer = _ask_shared(entry, pairs_of(table) if of_pairs else rates_of(table), 0.95)  # type: ignore[arg-type]
+        if isinstance(answer, Gap):
+            assert answer.key in GAP_KEYS
+        elif isinstance(answer, Interval):
+            assert answer.low < answer.high, table  # nan is not below anything
+            assert answer.adjusted is None
+        else:
+            assert 0 <= answer <= 1, table
+
+
+NEAR = {
+    "pair_difference": (0.05, 0.3),
+    "pair_ratio": (1.1, 2.0),
+    "pair_odds_ratio": (1.5, 10.0),
+    "rate": (0.018, 0.046),
+    "rate_difference": (0.0, 0.03),
+    "rate_ratio": (1.0, 4.0),
+}
+"""Where the limits of 25 index only and 7 reference only of 100 pairs, and of 30 in 1000 v 15 in 1000, have to lie."""
+
+
+@pytest.mark.parametrize("entry", SHARED, ids=_name)
+def test_every_entry_of_pairs_and_of_rates_reaches_its_own_function(entry: Method | methods.Test) -> None:
+    """One plain table each: limits near the estimate; p of 25 v 7 about 0.002, of 30 v 15 about 0.03."""
+    of_pairs = entry in (*methods.PAIR_METHODS, *methods.PAIR_TESTS)
+    answer = _ask_shared(entry, pairs_of((30, 25, 7, 38)) if of_pairs else rates_of((30, 1000.0, 15, 1000.0)), 0.95)
+    assert not isinstance(answer, Gap)
+    if isinstance(answer, Interval):
+        assert isinstance(entry, Method)
+        low, high = NEAR[entry.measure]
+        assert low < answer.low < answer.high < high
+    else:
+        assert (0.001 if of_pairs else 0.02) < answer < (0.004 if of_pairs else 0.04)
