@@ -5,7 +5,6 @@ from __future__ import annotations
 from dataclasses import dataclass
 from typing import Literal
 
-from fourcount.stats.estimates import without_a_contrast
 from fourcount.stats.results import Counts, Gap
 from fourcount.stats.score import mirrored
 
@@ -26,14 +25,14 @@ def fragility(counts: Counts, threshold: float = 0.05) -> FragilityIndex | Gap:
     A gap where p is not below the threshold to begin with. On the way to equal risks p passes through 1, so that
     any threshold up to 1 is reached before the group runs out. Source: Walsh and others 2014, J Clin Epidemiol 67:622.
     """
-    gap = without_a_contrast(counts)
-    if gap is not None:
-        return gap
     from fourcount.stats.adding_events import AddingEvents
+    from fourcount.stats.fisher import fisher
 
+    before = fisher(counts)
+    if isinstance(before, Gap):
+        return before
     index_lower = counts.index_events * counts.reference_total < counts.reference_events * counts.index_total
     path = AddingEvents(counts if index_lower else mirrored(counts), threshold)
-    before = path.p(0)
     if path.reaches(before):
         return Gap("fragility-not-below", {"p": before, "threshold": threshold})
     changes = path.first_reaching(0, path.to_equal_risks())
