@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Sequence
 from typing import Literal
 
-from fourcount.record.entry.figure_names import Name, name_at
+from fourcount.record.entry.figure_names import ADJUSTED, Name, name_at
 from fourcount.record.entry.readings import PrintedMeasure, PrintedNumber, PrintedUnit
 from fourcount.record.entry.tokens import Token
 from fourcount.record.entry.word_list import words
@@ -107,7 +107,7 @@ class Grammar:
             if name and place - name[0] > _LONGEST_WAY:
                 name = None
             if named := self._name(place):
-                name = (place, named)
+                name = (self._adjusted_from(place), named)
                 place += named.length
             elif level_found := self.level_at(place):
                 level, place = level_found
@@ -135,6 +135,10 @@ class Grammar:
             if following.kind == "word" and following.lower not in _FILLERS | {"for", "or"}:
                 return None
         return name
+
+    def _adjusted_from(self, place: int) -> int:
+        """The place of "adjusted" before a name, or of the name itself."""
+        return next((step for step in (place - 2, place - 1) if self._at(step).lower in ADJUSTED), place)
 
     def _begins_figure(self, place: int, named: bool) -> bool:
         """Whether an estimate stands here: a number, not of a length of time, nor a count of a total."""
@@ -262,9 +266,9 @@ class Grammar:
         relation, token, after, own = p
         if not own:
             return after
+        if found and found[-1].p is not None and not self.unnamed:
+            return after
         if not found or found[-1].p is not None:
-            if not self.unnamed:
-                return after
             found.append(Figure(place, None))
         figure = found[-1]
         figure.p, figure.p_relation, figure.after = printed_number(token), relation, after

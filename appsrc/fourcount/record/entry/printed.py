@@ -49,14 +49,11 @@ def read_paper(text: str, measure: PaperMeasure, field: str = "paper_text") -> P
     return PaperReading(figures=tuple(figures), marks=tuple(marks))
 
 
-def named_figures(printed: Print, measure: PaperMeasure) -> tuple[tuple[PrintedFigure, ...], tuple[int, int]]:
-    """The figures that a longer text names, and the places of the first and after the last of their tokens."""
+def named_figures(printed: Print, measure: PaperMeasure) -> tuple[tuple[PrintedFigure, tuple[int, int]], ...]:
+    """The figures that a longer text names, each with the places of its first token and after its last one."""
     found = Grammar(printed.tokens, unnamed=False).figures()
-    kept = [(figure, finished) for figure in found if (finished := _finished(figure, printed, measure))]
-    if not kept:
-        return (), (0, 0)
-    first = min(figure.first for figure, _ in kept)
-    return tuple(finished for _, finished in kept), (first, max(figure.after for figure, _ in kept))
+    finished = ((_finished(figure, printed, measure), (figure.first, figure.after)) for figure in found)
+    return tuple((figure, places) for figure, places in finished if figure)
 
 
 def _finished(figure: Figure, printed: Print, measure: PaperMeasure) -> PrintedFigure | None:

@@ -83,6 +83,30 @@ def take_apart(text: str) -> Print:
     return Print(shown, tuple(_with_spelled(_tokens(in_ascii(shown)))))
 
 
+def as_sentence(printed: Print) -> Print:
+    """The same without breaks of lines, and with thousands that a space bar's space parts ("10 418") as one number.
+
+    Two numbers side by side mean nothing else in a sentence; in a table they are two cells.
+    """
+    found: list[Token] = []
+    for token in printed.tokens:
+        last = found[-1] if found else None
+        if last and last.kind == token.kind == "number" and _continues(last, token):
+            text = printed.shown[last.start : token.start] + token.text
+            whole = (last.whole or 0) * 1000 + (token.whole or 0)
+            found[-1] = Token("number", text, last.start, token.end, "", float(whole), whole, 0, token.percent)
+        elif token.kind != "break":
+            found.append(token)
+    return Print(printed.shown, tuple(found))
+
+
+def _continues(last: Token, token: Token) -> bool:
+    if last.whole is None or token.whole is None or last.percent or last.text[0] == "0":
+        return False
+    head = len(last.text) <= 3 or " " in last.text
+    return head and len(token.text) == 3 and token.start == last.end + 1 and last.whole < 10**9 and not last.lower
+
+
 def in_ascii(shown: str) -> str:
     """Character for character in ASCII, but narrow and no-break spaces stay apart from a space bar's own."""
     if shown.isascii():

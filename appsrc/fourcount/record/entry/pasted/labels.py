@@ -1,0 +1,251 @@
+"""What the two groups of a sentence are called."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+
+from fourcount.record.entry.pasted.quantities import CLOSING, OPENING, Quantity
+from fourcount.record.entry.pasted.vocabulary import (
+    ARTICLES,
+    COMPARATORS,
+    GROUP_NOUNS,
+    INTRODUCERS,
+    LINKING,
+    PEOPLE,
+    TIME_UNITS,
+    VERBS,
+)
+from fourcount.record.entry.tokens import Print, Token
+
+_MOST_WORDS = 9
+_WITH = ("with", "without")
+_JOINING = frozenset(("-", "/", "+", "&"))
+_ALWAYS_STOP = COMPARATORS | VERBS | {"respectively", "who", "which", "that", "p", "n"}
+_BEFORE_LABELS = ARTICLES | {"their", "his", "her", "those"}
+_SPANS = frozenset(("at", "within", "by", "over", "during", "after", "until", "through"))
+
+
+class Labels:
+    """A reader of labels in the tokens around quantities."""
+
+    def __init__(self, printed: Print) -> None:
+        self.printed = printed
+        self.tokens = printed.tokens
+
+    def of(self, first: Quantity, second: Quantity, start: int, end: int) -> tuple[str, str]:
+        """Both labels, "" where none is told; ``start`` and ``end`` bound the sentence."""
+        after = (
+            self._behind_leading_total(first, start) or self.behind(first.after, second.first),
+            self._behind_leading_total(second, first.after) or self.behind(second.after, end),
+        )
+        if all(after):
+            return self._told_apart(*after)
+        before = (self.ahead(first.first, start), self.ahead(second.first, first.after))
+        if all(before):
+            return self._told_apart(*before)
+        if not after[0]:
+            pair = self._both_behind(second.after, end) or self._both_ahead(start, first.first)
+            if pair:
+                return self._told_apart(*pair)
+        if not (after[1] or before[1]):
+            return after[0], ""
+        return self._told_apart(after[0] or before[0], after[1] or before[1])
+
+    def _behind_leading_total(self, quantity: Quantity, start: int) -> str:
+        """The label in "of the 320 women allocated to walking, 48 ..."."""
+        total = quantity.total
+        if total is None or total.start >= self.tokens[quantity.first].start:
+            return ""
+        place = next((place for place in range(start, quantity.first) if self.tokens[place] is total), quantity.first)
+        return self.behind(place + 1, quantity.first)
+
+    def _told_apart(self, first: str, second: str) -> tuple[str, str]:
+        """Labels without the same "with" before both; "without" stays, and then so does its "with"."""
+        labels = [first, second]
+        for place, other in ((0, 1), (1, 0)):
+            if labels[place].casefold().startswith("with ") and not labels[other].casefold().startswith("without "):
+                labels[place] = labels[place][5:]
+        return labels[0], labels[1]
+
+    def behind(self, place: int, end: int) -> str:
+        """The label in "... patients (9.2%) assigned to the night-light group"."""
+        place = self._past_people(place, end)
+        if place >= end:
+            return ""
+        token = self.tokens[place]
+        if token.text == ":" or token.lower not in INTRODUCERS:
+            return self._apposition(place, end)
+        kept = place if token.lower == "without" else None
+        kept = place if token.lower in ("with", "not", "before", "after") and kept is None else kept
+        while place < end and (self._leads(place, end)):
+            if self.tokens[place].lower in (*_WITH, "not"):
+                kept = place
+            elif self.tokens[place].lower in INTRODUCERS and self.tokens[place].lower not in ("before", "after"):
+                kept = None if kept is None or self.tokens[kept].lower not in ("not",) else kept
+            place += 1
+        return self._collected(place, end, kept)
+
+    def _leads(self, place: int, end: int) -> bool:
+        """Whether a word only leads to the label, as in "in the group that was assigned to"."""
+        word = self.tokens[place].lower
+        following = self.tokens[place + 1] if place + 1 < end else None
+        if word in GROUP_NOUNS:
+            return following is not None and following.text != "A" and following.lower in INTRODUCERS | LINKING
+        if word in INTRODUCERS | LINKING:
+            return self.tokens[place].text != "A"
+        return word in PEOPLE and following is not None and following.lower in INTRODUCERS
+
+    def _past_people(self, place: int, end: int) -> int:
+        """The place after brackets, percentages, nouns of people and "who were" behind a quantity."""
+        while place < end:
+            token = self.tokens[place]
+            if token.text in OPENING:
+                place = self._past_bracket(place, end)
+            elif token.text in CLOSING or token.percent or token.lower in PEOPLE or token.lower in LINKING - {"and"}:
+                place += 1
+            elif token.text == "," and self._introduces(place + 1, end):
+                place += 1
+            elif token.kind == "word" and self._introduces(place + 1, end) and token.lower not in _STOPS_HERE:
+                place += 1
+            else:
+                break
+        return place
+
+    def _introduces(self, place: int, end: int) -> bool:
+        return place < end and self.tokens[place].lower in INTRODUCERS
+
+    def _past_bracket(self, place: int, end: int) -> int:
+        depth = 0
+        for step in range(place, end):
+            depth += (self.tokens[step].text in OPENING) - (self.tokens[step].text in CLOSING)
+            if depth == 0:
+                return step + 1
+        return end
+
+    def _apposition(self, place: int, end: int) -> str:
+        """The label in "61/118 stocking v 44/121 bandage"."""
+        if self.tokens[place].kind != "word" or self.tokens[place].lower in _STOPS_HERE:
+            return ""
+        label = self._collected(place, end, None)
+        return label if len(label.split()) <= 3 else ""
+
+    def _collected(self, place: int, end: int, kept: int | None) -> str:
+        """The words of a label from a place on, up to whatever ends it."""
+        start = place
+        while place < end and place - start < _MOST_WORDS and not self._ends(place, end, place == start):
+            place += 1
+        return self._trimmed(start, place, kept)
+
+    def _ends(self, place: int, end: int, at_start: bool) -> bool:
+        token = self.tokens[place]
+        following = self.tokens[place + 1] if place + 1 < end else None
+        if token.kind == "number":
+            return token.percent or following is None or following.lower in PEOPLE or following.lower in TIME_UNITS
+        if token.kind == "mark":
+            inner = token.text in _JOINING and not at_start and following is not None and following.kind != "mark"
+            return not inner
+        if token.lower in _ALWAYS_STOP or (not at_start and token.lower in ("in", "of", "among", "for", "to")):
+            return True
+        if token.lower in _SPANS:
+            return not at_start
+        if token.lower in ("and", "or", "but"):
+            return following is None or following.kind != "word" or following.lower in INTRODUCERS | LINKING | VERBS
+        return place > 0 and self.tokens[place - 1].kind == "word" and self.tokens[place - 1].text.endswith(".")
+
+    def _trimmed(self, start: int, after: int, kept: int | None) -> str:
+        """A label without articles before it and "group" behind it."""
+        while start < after and self.tokens[start].lower in _BEFORE_LABELS and self.tokens[start].text != "A":
+            start += 1
+        while start < after and self._is_noise(after - 1, start):
+            after -= 1
+        while start < after and self.tokens[after - 1].kind == "mark":
+            after -= 1
+        if start >= after:
+            return ""
+        lead = self.tokens[kept].text + " " if kept is not None else ""
+        return (lead + self.printed.piece(start, after)).rstrip(".").replace("\n", " ")
+
+    def _is_noise(self, place: int, start: int) -> bool:
+        word = self.tokens[place].lower
+        if word in GROUP_NOUNS:
+            return place > start
+        return word in ("and", "or", "the", "patients", "participants", "recipients", "alone.") and place > start
+
+    def ahead(self, place: int, start: int) -> str:
+        """The label in "in the night-light arm, 38 of 412" or "night lights: 38 of 412"."""
+        place -= 1
+        while place > start and (self.tokens[place].text in (",", ":", "=", "(", "[", "-") or self._is_verb(place)):
+            place -= 1
+        after = place + 1
+        while place >= start and after - place <= _MOST_WORDS and self._belongs(place):
+            place -= 1
+        found = place + 1
+        introduced = place >= start and self.tokens[place].lower in ("in", "with", "for", "among", "on", "without")
+        colon = after < len(self.tokens) and self.tokens[after].text in (":", ",", "=")
+        bare = after - found <= 4 and (place < start or self.tokens[place].text in (";", ",", ":", "(", "."))
+        if not (introduced or colon or bare or (place >= 0 and self.tokens[place].lower in COMPARATORS | {"and"})):
+            return ""
+        kept = place if introduced and self.tokens[place].lower in _WITH else None
+        return self._trimmed(found, after, kept)
+
+    def _is_verb(self, place: int) -> bool:
+        return self.tokens[place].lower in ("was", "were", "had", "by", "it", "is")
+
+    def _belongs(self, place: int) -> bool:
+        token = self.tokens[place]
+        if token.kind == "mark":
+            return token.text in _JOINING
+        if token.kind == "number":
+            return False
+        stops = token.lower in COMPARATORS or token.lower in VERBS or token.lower in INTRODUCERS
+        return not (stops or token.lower in ("and", "of", "to", "by", "or", "but"))
+
+    def _both_behind(self, place: int, end: int) -> tuple[str, str] | None:
+        """Both labels in "in the night-light and usual-care groups, respectively"."""
+        place = self._past_people(place, end)
+        if place >= end or self.tokens[place].lower not in INTRODUCERS:
+            return None
+        return self._split(place + 1, end)
+
+    def _both_ahead(self, start: int, end: int) -> tuple[str, str] | None:
+        """Both labels in "in the night-light and usual-care groups, 38 of 412 and 70 of 409 ..."."""
+        for place in range(start, end):
+            if self.tokens[place].lower in ("in", "with", "for", "among"):
+                found = self._split(place + 1, end)
+                if found:
+                    return found
+        return None
+
+    def _split(self, place: int, end: int) -> tuple[str, str] | None:
+        border = None
+        start = place
+        while place < end and place - start < 2 * _MOST_WORDS:
+            token = self.tokens[place]
+            if token.lower in ("and", "versus", "vs", "v") and border is None:
+                border = place
+            elif (token.kind != "word" and token.text not in _JOINING) or token.lower in VERBS | {"respectively"}:
+                break
+            elif token.lower in ("groups", "arms", "cohorts"):
+                place += 1
+                break
+            place += 1
+        if border is None:
+            return None
+        pair = self._trimmed(start, border, None), self._trimmed(border + 1, place, None)
+        return pair if all(pair) else None
+
+
+_STOPS_HERE = COMPARATORS | VERBS | INTRODUCERS | {"and", "or", "respectively", "by", "of", "but", "per"}
+
+
+def sentence_bounds(tokens: Sequence[Token]) -> list[int]:
+    """The places at which sentences end, the end of the text included."""
+    ends = []
+    for place, token in enumerate(tokens[:-1]):
+        following = tokens[place + 1]
+        stop = token.text == "." or (token.kind == "word" and token.text.endswith(".") and len(token.text) > 3)
+        if stop and token.lower not in ("vs", "v", "approx", "no") and following.text[:1].isupper():
+            ends.append(place + 1)
+        elif stop and following.kind == "number" and following.lower and token.text != "vs.":
+            ends.append(place + 1)
+    return [*ends, len(tokens)]

@@ -1,0 +1,117 @@
+"""How many people each group has, where a sentence prints that apart from the counts."""
+
+from __future__ import annotations
+
+from collections.abc import Iterator, Sequence
+
+import msgspec
+
+from fourcount.record.entry.pasted.quantities import Quantity, gives
+from fourcount.record.entry.pasted.vocabulary import NOT_COUNTED, PEOPLE, TIME_UNITS
+from fourcount.record.entry.tokens import Token
+
+_LEADS = frozenset(("of", "among", "the", "in", "assigned", "allocated", "randomised", "randomized", "and", "received"))
+
+
+class Candidate(msgspec.Struct, frozen=True):
+    """A whole number that may be a total; ``said`` where ``n =`` or a noun of people says so."""
+
+    place: int
+    token: Token
+    said: bool
+    named: bool
+
+
+def with_totals(
+    tokens: Sequence[Token], first: Quantity, second: Quantity, taken: frozenset[int], end: int
+) -> tuple[Quantity, Quantity, bool]:
+    """Both quantities with totals as far as the text tells them, and whether only the percentages tell which.
+
+    The places in which print puts totals are tried in order; one fits if no count is above it and every percentage is
+    what the count gives.
+    """
+    found = _candidates(tokens, taken, (first, second))
+    for totals, nearby in _ways(found, first, second, end):
+        if all(_fits(quantity, total) for quantity, total in zip((first, second), totals, strict=True)):
+            one, two = (_given(quantity, total) for quantity, total in zip((first, second), totals, strict=True))
+            return one, two, not nearby
+    return first, second, False
+
+
+def shared_total(tokens: Sequence[Token], first: Quantity, second: Quantity, taken: frozenset[int]) -> bool:
+    """Whether both counts are printed as percentages of one and the same number: parts of one group."""
+    if first.percent is None or second.percent is None or first.events is None or second.events is None:
+        return False
+    return any(
+        _fits(first, candidate) and _fits(second, candidate) for candidate in _candidates(tokens, taken, (first, second))
+    )
+
+
+def _candidates(
+    tokens: Sequence[Token], taken: frozenset[int], quantities: Sequence[Quantity]
+) -> list[Candidate]:
+    inside = {place for quantity in quantities for place in range(quantity.first, quantity.after)}
+    found = []
+    for place, token in enumerate(tokens):
+        if token.kind != "number" or not token.whole or token.percent or place in taken or place in inside:
+            continue
+        before = tokens[place - 1] if place else token
+        behind = [each.lower for each in tokens[place + 1 : place + 4]]
+        if behind and (behind[0] in TIME_UNITS or behind[0] in NOT_COUNTED or behind[0] in ("ci", "/")):
+            continue
+        if before.lower in NOT_COUNTED or before.text in ("/", "-", "<", ">") or before.lower == "aged":
+            continue
+        named = before.text == "=" or before.lower == "n"
+        said = named or bool(PEOPLE.intersection(behind)) or before.lower in _LEADS
+        found.append(Candidate(place, token, said, named))
+    return found
+
+
+def _ways(
+    found: Sequence[Candidate], first: Quantity, second: Quantity, end: int
+) -> Iterator[tuple[tuple[Candidate | None, Candidate | None], bool]]:
+    """Pairs of totals in the order in which they are believed, and whether they stand where totals usually do."""
+    before = [each for each in found if each.place < first.first]
+    between = [each for each in found if first.after <= each.place < second.first]
+    behind = [each for each in found if second.after <= each.place < end]
+    after = [each for each in found if each.place >= second.after]
+    own_first, own_second = first.total is not None, second.total is not None
+    if own_first and own_second:
+        yield (None, None), True
+    for one in [None] if own_first else between:
+        for two in [None] if own_second else behind:
+            yield (one, two), True
+    for one in [None] if own_first else before[::-1]:
+        for two in [None] if own_second else between[::-1]:
+            yield (one, two), one is None or one.place > first.first - 12
+    if own_first or own_second:
+        for one in after + before:
+            yield ((None, one) if own_first else (one, None)), False
+        return
+    for group in (behind, before[::-1], after):
+        yield from ((pair, group is behind) for pair in _neighbours(group, backwards=group and group[0].place < first.first))
+
+
+def _neighbours(
+    group: Sequence[Candidate], backwards: object
+) -> Iterator[tuple[Candidate, Candidate]]:
+    for one, two in zip(group, group[1:], strict=False):
+        yield (two, one) if backwards else (one, two)
+
+
+def _fits(quantity: Quantity, total: Candidate | None) -> bool:
+    if total is None:
+        return quantity.total is not None
+    if quantity.time is not None or quantity.low is not None:
+        return False
+    if quantity.events is None:
+        return total.said
+    if (quantity.events.whole or 0) > (total.token.whole or 0):
+        return False
+    if quantity.percent is None:
+        return total.named
+    return gives(quantity.percent, quantity.events.whole or 0, total.token.whole or 0)
+
+
+def _given(quantity: Quantity, total: Candidate | None) -> Quantity:
+    return quantity if total is None else msgspec.structs.replace(quantity, total=total.token)

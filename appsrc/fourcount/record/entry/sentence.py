@@ -1,0 +1,217 @@
+"""A pasted sentence, as a paper's text prints its result, as a table."""
+
+from __future__ import annotations
+
+from collections.abc import Iterator, Sequence
+
+from fourcount.record.entry.pasted.doubts import PASTE_DOUBTS
+from fourcount.record.entry.pasted.event_words import event_words, time_span
+from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
+from fourcount.record.entry.pasted.quantities import Phrases, Quantity, gives
+from fourcount.record.entry.pasted.totals import shared_total, with_totals
+from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, NOT_COUNTED
+from fourcount.record.entry.printed import named_figures
+from fourcount.record.entry.readings import Pasted, PastedGroup, PrintedFigure
+from fourcount.record.entry.tokens import LONGEST_TEXT, Print, Token, as_sentence, take_apart
+from fourcount.record.outcome import Form
+
+__all__ = ["PASTE_DOUBTS", "read_sentence"]
+
+_MOST_TOKENS = 3000
+_MOST_PAIRS = 60
+_EFFECTS = ("risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference")
+_GROUP_WORDS = GROUP_NOUNS | {"groups", "arms", "placebo", "respectively", "control"}
+
+
+def read_sentence(text: str) -> Pasted | None:
+    """What a sentence says of two groups, with the results printed beside it; None where it holds no table.
+
+    Understood are counts of totals, percentages of totals, events in person-time, risks with limits, and results
+    without counts. Longer text, such as an abstract, is searched for the first two counts that belong together.
+    """
+    if not any(character.isdecimal() for character in text[:LONGEST_TEXT]) or len(text) > LONGEST_TEXT:
+        return None
+    printed = as_sentence(take_apart(text))
+    if len(printed.tokens) > _MOST_TOKENS:
+        return None
+    return SentenceReader(printed).read()
+
+
+class SentenceReader:
+    """One sentence, or a few, while they are read."""
+
+    def __init__(self, printed: Print) -> None:
+        self.printed = printed
+        self.tokens = printed.tokens
+        found = named_figures(printed, "risk_ratio")
+        self.figures = tuple(figure for figure, _ in found)
+        self.spans = tuple(span for _, span in found)
+        self.busy = frozenset(place for span in self.spans for place in range(*span))
+        self.ends = sentence_bounds(self.tokens)
+
+    def read(self) -> Pasted | None:
+        """The first two quantities that make a table, else results alone, else None."""
+        for bare in (False, True):
+            quantities = self._quantities(bare=bare)
+            for first, second in self._pairs(quantities, bare=bare):
+                pasted = self._table(first, second, quantities, bare=bare)
+                if pasted:
+                    return pasted
+        return self._effect_only()
+
+    def _quantities(self, *, bare: bool) -> list[Quantity]:
+        phrases = Phrases(self.tokens, self.busy, bare=bare)
+        found: list[Quantity] = []
+        place = 0
+        while place < len(self.tokens):
+            quantity = phrases.quantity_at(place) if self.tokens[place].kind == "number" else None
+            if quantity and not self._of_something_else(quantity):
+                found.append(quantity)
+                place = quantity.after
+            elif quantity:
+                place = quantity.after
+            else:
+                place += 1
+        return found
+
+    def _of_something_else(self, quantity: Quantity) -> bool:
+        """Whether the words around a number of a number say that it counts no people, or measures a test."""
+        before = {token.lower for token in self.tokens[max(0, quantity.first - 6) : quantity.first]}
+        near = {token.lower for token in self.tokens[quantity.first : quantity.after + 3]}
+        if {"sensitivity", "specificity"} & (before | near):
+            return True
+        if quantity.percent is not None or quantity.time is not None:
+            return False
+        return bool(NOT_COUNTED & (before | near))
+
+    def _pairs(self, quantities: Sequence[Quantity], *, bare: bool) -> Iterator[tuple[Quantity, Quantity]]:
+        """Neighbours of one kind, complete ones first; not more of them than a reader would look at."""
+        fitting = [pair for pair in zip(quantities, quantities[1:], strict=False) if self._alike(*pair)]
+        if not bare:
+            yield from [pair for pair in fitting if pair[0].complete and pair[1].complete][:_MOST_PAIRS]
+        yield from [pair for pair in fitting if not (pair[0].complete and pair[1].complete)][:_MOST_PAIRS]
+
+    def _alike(self, first: Quantity, second: Quantity) -> bool:
+        """Whether two quantities are of one kind and in the same or in neighbouring sentences."""
+        kinds = [(each.events is not None, each.time is not None, each.low is not None) for each in (first, second)]
+        borders = sum(first.after <= end <= second.first for end in self.ends)
+        return kinds[0] == kinds[1] and borders <= 1
+
+    def _table(self, first: Quantity, second: Quantity, quantities: Sequence[Quantity], *, bare: bool) -> Pasted | None:
+        start = max((end for end in self.ends if end <= first.first), default=0)
+        end = min(end for end in self.ends if end >= second.after)
+        doubts: list[str] = []
+        if not (first.complete and second.complete):
+            taken = self.busy | {place for each in quantities if each.events or each.percent for place in range(each.first, each.after) if each not in (first, second) and not bare}
+            first_full, second_full, by_percent = with_totals(self.tokens, first, second, taken, end)
+            if first_full.complete and second_full.complete:
+                doubts += ["totals-by-percent"] if by_percent else []
+            elif bare or not self._counts_without_totals(first, second, taken, start, end):
+                return None
+            else:
+                doubts.append("no-totals")
+            first, second = first_full, second_full
+        labels = Labels(self.printed).of(first, second, start, end)
+        if not self._compared(first, second, labels, (start, end)):
+            if not (first.complete and second.complete and first.percent and second.percent):
+                return None
+            if (first.total and first.total.whole) == (second.total and second.total.whole):
+                return None
+            doubts.append("not-compared")
+        return self._pasted((first, second), labels, (start, end), doubts, quantities)
+
+    def _counts_without_totals(
+        self, first: Quantity, second: Quantity, taken: frozenset[int], start: int, end: int
+    ) -> bool:
+        """Whether counts with percentages are those of two groups though nobody says how large these are."""
+        if first.events is None or second.events is None or not (first.percent and second.percent):
+            return False
+        labels = Labels(self.printed).of(first, second, start, end)
+        if shared_total(self.tokens, first, second, taken) or not all(labels):
+            return False
+        return self._compared(first, second, labels, (start, end), strictly=True)
+
+    def _compared(
+        self, first: Quantity, second: Quantity, labels: tuple[str, str], bounds: tuple[int, int], *, strictly: bool = False
+    ) -> bool:
+        """Whether anything says that the two are groups of one comparison."""
+        between = {token.lower for token in self.tokens[first.after : second.first]}
+        around = {token.lower for token in self.tokens[bounds[0] : bounds[1]]}
+        effect = any(figure.measure in _EFFECTS for figure in self.figures)
+        if COMPARATORS & between or _GROUP_WORDS & around or effect:
+            return True
+        introduced = all(labels) and (first.total is None or second.total is None or not strictly)
+        return introduced and not strictly
+
+    def _pasted(
+        self,
+        pair: tuple[Quantity, Quantity],
+        labels: tuple[str, str],
+        bounds: tuple[int, int],
+        doubts: list[str],
+        quantities: Sequence[Quantity],
+    ) -> Pasted:
+        form = _form(pair)
+        if any(each.percent and each.events and each.total and not _agrees(each) for each in pair):
+            doubts.append("percent-disagrees")
+        others = [each for each in quantities if each.events and each.complete and each.first not in (pair[0].first, pair[1].first)]
+        if others and not (pair[0].time and not others[0].time):
+            doubts.append("more-counts")
+        if self.tokens[pair[0].first - 1].lower == "from" and self.tokens[pair[1].first - 1].lower == "to":
+            doubts.append("changed-count")
+        return Pasted(
+            form=form,
+            groups=tuple(_group(form, quantity, label) for quantity, label in zip(pair, labels, strict=True)),
+            words=event_words(self.printed, pair[0], pair[1], *bounds),
+            unit=pair[0].unit or pair[1].unit,
+            span=time_span(self.printed, *bounds) or time_span(self.printed, 0, len(self.tokens)),
+            figures=self.figures,
+            paper_text=self._paper_text(),
+            ambiguous=tuple(doubts),
+            source="sentence",
+        )
+
+    def _effect_only(self) -> Pasted | None:
+        """Results with limits and without counts ("adjusted hazard ratio, 0.72; 95% CI, 0.55 to 0.92")."""
+        effects = tuple(figure for figure in self.figures if figure.measure in _EFFECTS and figure.low and figure.high)
+        if not effects:
+            return None
+        return Pasted(form="effect-only", figures=self.figures, paper_text=self._paper_text(), source="sentence")
+
+    def _paper_text(self) -> str:
+        """The printed results in one piece, or joined by "; " where other words stand between them."""
+        pieces = [self.printed.piece(first, after) for first, after in self.spans]
+        if len(self.spans) > 1 and self.spans[-1][1] - self.spans[0][0] <= sum(b - a for a, b in self.spans) + len(self.spans) * 2:
+            pieces = [self.printed.piece(self.spans[0][0], self.spans[-1][1])]
+        return " ".join("; ".join(pieces).split())
+
+
+def _form(pair: Sequence[Quantity]) -> Form:
+    if pair[0].time is not None:
+        return "person-time"
+    if pair[0].events is not None:
+        return "events-of-total"
+    return "risk-at-time" if pair[0].low is not None else "percent-of-total"
+
+
+def _agrees(quantity: Quantity) -> bool:
+    events, total = quantity.events, quantity.total
+    if quantity.percent is None or events is None or total is None:
+        return True
+    return gives(quantity.percent, events.whole or 0, total.whole or 0)
+
+
+def _group(form: Form, quantity: Quantity, label: str) -> PastedGroup:
+    """A group's two cells; a percentage stays beside its count only where the count does not give it."""
+    part = quantity.events or quantity.percent
+    left = part.text if part else ""
+    if form in ("percent-of-total", "risk-at-time"):
+        left += "%"
+    elif quantity.percent is not None and not _agrees(quantity):
+        left += f" ({quantity.percent.text}%)"
+    if form == "risk-at-time" and quantity.low and quantity.high:
+        right = f"{quantity.low.text} to {quantity.high.text}%"
+    else:
+        whole: Token | None = quantity.time or quantity.total
+        right = whole.text if whole else ""
+    return PastedGroup(left_text=left, right_text=right, label=label)
