@@ -8,20 +8,23 @@ computed once, and the binomial probabilities of the tables whose interval holds
 simulated. A table for which a method gives no interval, or one from 0 to infinity that says nothing, counts neither
 way: its probability is left out, and its average is the column "none". Widths are compared on tables without a zero
 cell, where every method has one; those of ratios are on the log scale.
+
+Pairs are listed likewise for numbers of pairs, over a grid of both sides' risks and three correlations of the sides;
+person-time for a grid of expected events in both groups, all counts to far beyond the largest expectation.
 """
 
 from __future__ import annotations
 
 import argparse
 import math
-from collections.abc import Callable, Iterable, Sequence
+from collections.abc import Callable, Iterable, Iterator, Sequence
 from dataclasses import dataclass
 
 import numpy as np
 from numpy.typing import NDArray
 
-from fourcount.stats.methods import METHODS, Method
-from fourcount.stats.results import Counts, Interval
+from fourcount.stats.methods import METHODS, PAIR_METHODS, RATE_METHODS, Method
+from fourcount.stats.results import Counts, Interval, PairCounts, Rates
 
 CELLS = ("index_events", "index_non_events", "reference_events", "reference_non_events")
 LEVEL = 0.95
@@ -29,6 +32,13 @@ SIZES = ((10, 10), (20, 20), (15, 30), (40, 40))
 SINGLE_SIZES = (10, 20, 50)
 RISKS = (0.02, *(step / 40 for step in range(2, 39)), 0.98)
 FINE_RISKS = tuple(step / 200 for step in range(1, 200))
+PAIR_SIZES = (20, 50)
+PAIR_RISKS = (0.05, *(step / 10 for step in range(1, 10)), 0.95)
+CORRELATIONS = (0.0, 0.3, 0.6)
+TIMES = ((1.0, 1.0), (1.0, 3.0))
+EXPECTED = (0.5, *range(1, 11), 12, 15, 20, 25)
+FINE_EXPECTED = tuple(step / 4 for step in range(2, 161))
+MOST_EVENTS = 100  # at 40 expected events more than these have a probability of 1e-15
 TINY = 1e-12  # a limit that equals the true value but for the last digits of a double holds it
 
 Array = NDArray[np.float64]
@@ -84,7 +94,7 @@ def weigh(weights: Array, truth: Array, found: Array, width: Array) -> Coverage:
     comparable = np.isfinite(width)
     shares = weights[:, comparable]
     mean_width = float((shares @ width[comparable] / shares.sum(axis=1)).mean())
-    return Coverage(held=(weights * (holds & has)).sum(axis=1) / some, none=1 - some, width=mean_width)
+    return Coverage(held=(weights * (holds & has)).sum(axis=1) / some, none=np.maximum(1 - some, 0), width=mean_width)
 
 
 def two_groups(method: Method, sizes: tuple[int, int], risks: Sequence[float], level: float) -> Coverage:
@@ -107,6 +117,76 @@ def one_group(method: Method, total: int, risks: Sequence[float], level: float) 
     return weigh(binomial(total, risks), np.array(risks), found, _width(found, full, log_scale=False))
 
 
+def pair_points(risks: Sequence[float], correlations: Sequence[float]) -> Array:
+    """The chances of both, index only, reference only, neither at each point where all four can happen."""
+    points = []
+    for index in risks:
+        for reference in risks:
+            for correlation in correlations:
+                spread = math.sqrt(index * (1 - index) * reference * (1 - reference))
+                both = index * reference + correlation * spread
+                points.append((both, index - both, reference - both, 1 - index - reference + both))
+    return np.array([point for point in points if min(point) > TINY])
+
+
+PAIR_TRUTHS: dict[str, Callable[[Array], Array]] = {
+    "pair_difference": lambda chances: chances[:, 1] - chances[:, 2],
+    "pair_ratio": lambda chances: (chances[:, 0] + chances[:, 1]) / (chances[:, 0] + chances[:, 2]),
+    "pair_odds_ratio": lambda chances: chances[:, 1] / chances[:, 2],
+}
+
+
+def of_pairs(method: Method, total: int, chances: Array, level: float) -> Coverage:
+    """One method of pairs at points of four chances, by every split of ``total`` pairs."""
+    cells = [
+        (both, index, reference, total - both - index - reference)
+        for both in range(total + 1)
+        for index in range(total + 1 - both)
+        for reference in range(total + 1 - both - index)
+    ]
+    found = limits(
+        method.interval(PairCounts(**dict(zip(PairCounts.__slots__, row, strict=True))), level) for row in cells
+    )
+    counts = np.array(cells, dtype=np.float64)
+    ways = [math.lgamma(total + 1) - sum(math.lgamma(count + 1) for count in row) for row in cells]
+    weights = np.exp(np.log(chances) @ counts.T + np.array(ways))
+    full = np.array([0 not in row for row in cells])
+    truth = PAIR_TRUTHS[method.measure](chances)
+    return weigh(weights, truth, found, _width(found, full, method.measure.endswith("ratio")))
+
+
+def poisson(expected: Sequence[float]) -> Array:
+    """The probability of each count 0 to ``MOST_EVENTS`` (columns) at each expectation (rows)."""
+    counts = np.arange(MOST_EVENTS + 1)
+    logs = np.array([math.lgamma(count + 1) for count in counts])
+    means = np.array(expected, dtype=np.float64)[:, None]
+    return np.asarray(np.exp(counts * np.log(means) - means - logs))
+
+
+def two_rates(method: Method, times: tuple[float, float], expected: Sequence[float], level: float) -> Coverage:
+    """One method of two rates over the grid of both groups' expected events."""
+    cells = [(x1, x2) for x1 in range(MOST_EVENTS + 1) for x2 in range(MOST_EVENTS + 1)]
+    found = limits(
+        method.interval(
+            Rates(index_events=x1, index_time=times[0], reference_events=x2, reference_time=times[1]), level
+        )
+        for x1, x2 in cells
+    )
+    weights = np.einsum("ia,jc->ijac", poisson(expected), poisson(expected)).reshape(len(expected) ** 2, len(cells))
+    index, reference = np.meshgrid(np.array(expected) / times[0], np.array(expected) / times[1], indexing="ij")
+    ratio = method.measure == "rate_ratio"
+    truth = (index / reference if ratio else index - reference).ravel()
+    full = np.array([0 not in row for row in cells])
+    return weigh(weights, truth, found, _width(found, full, ratio))
+
+
+def one_rate(method: Method, expected: Sequence[float], level: float) -> Coverage:
+    """One method of a single rate over a grid of expected events."""
+    found = limits(method.interval(events, 1.0, level) for events in range(MOST_EVENTS + 1))
+    full = np.arange(MOST_EVENTS + 1) > 0
+    return weigh(poisson(expected), np.array(expected), found, _width(found, full, log_scale=False))
+
+
 def _width(found: Array, full: Array, log_scale: bool) -> Array:
     """Each table's width; nan where a cell is 0."""
     width = np.full(len(found), np.nan)
@@ -124,24 +204,46 @@ def together(parts: Sequence[Coverage]) -> Coverage:
     )
 
 
+def parts_of(method: Method) -> Iterator[tuple[object, Coverage]]:
+    """Each size with the coverage of a method in it."""
+    if method.measure == "risk":
+        for size in SINGLE_SIZES:
+            yield size, one_group(method, size, FINE_RISKS, LEVEL)
+    elif method.measure in TRUTHS:
+        for sizes in SIZES:
+            yield sizes, two_groups(method, sizes, RISKS, LEVEL)
+    elif method.measure in PAIR_TRUTHS:
+        for size in PAIR_SIZES:
+            yield size, of_pairs(method, size, pair_points(PAIR_RISKS, CORRELATIONS), LEVEL)
+    elif method.measure == "rate":
+        yield "", one_rate(method, FINE_EXPECTED, LEVEL)
+    else:
+        for times in TIMES:
+            yield times, two_rates(method, times, EXPECTED, LEVEL)
+
+
 def main() -> None:
     parser = argparse.ArgumentParser(description="Real coverage of every interval method by full enumeration.")
     parser.add_argument("--each", action="store_true", help="also a row for each size")
-    each = parser.parse_args().each
+    parser.add_argument("--measure", help="only the methods of this measure")
+    options = parser.parse_args()
     print(f"Real coverage of intervals at {LEVEL:.0%}")
     print(f"two groups of {', '.join(f'{n1} v {n2}' for n1, n2 in SIZES)}; {len(RISKS)} x {len(RISKS)} risks each")
     print(f"one group of {', '.join(map(str, SINGLE_SIZES))}; {len(FINE_RISKS)} risks each")
+    points = len(pair_points(PAIR_RISKS, CORRELATIONS))
+    print(f"{' and '.join(map(str, PAIR_SIZES))} pairs; {points} points of two risks and a correlation of 0, 0.3, 0.6")
+    times = ", ".join(f"{t1:g} v {t2:g}" for t1, t2 in TIMES)
+    print(
+        f"person-time of {times}; {len(EXPECTED)} x {len(EXPECTED)} expected events of {EXPECTED[0]} to {EXPECTED[-1]}"
+    )
+    print(f"one rate; {len(FINE_EXPECTED)} expected events of {FINE_EXPECTED[0]} to {FINE_EXPECTED[-1]:g}")
     print(HEADING)
-    for method in METHODS:
-        single = method.measure == "risk"
-        sizes: Sequence[object] = SINGLE_SIZES if single else SIZES
-        parts = [
-            one_group(method, size, FINE_RISKS, LEVEL) if single else two_groups(method, size, RISKS, LEVEL)  # type: ignore[arg-type]
-            for size in sizes
-        ]
-        print(f"{method.measure:17} {method.key:26} {together(parts).row()}")
-        for size, part in zip(sizes, parts, strict=True) if each else ():
-            print(f"{size!s:>44} {part.row()}")
+    for method in (*METHODS, *PAIR_METHODS, *RATE_METHODS):
+        if options.measure in (None, method.measure):
+            parts = list(parts_of(method))
+            print(f"{method.measure:17} {method.key:26} {together([part for _, part in parts]).row()}", flush=True)
+            for size, part in parts if options.each else ():
+                print(f"{size!s:>44} {part.row()}")
 
 
 if __name__ == "__main__":

@@ -76,3 +76,29 @@ def test_jeffreys_average_and_least_coverage() -> None:
     for part in parts:
         assert 0.949 < part.held.mean() < 0.954
         assert 0.86 < part.held.min() < 0.9
+
+
+@pytest.mark.parametrize("level", [0.8, 0.95])
+def test_the_conditional_interval_of_pairs_never_covers_less_than_its_level(level: float) -> None:
+    """It keeps its level for each number of discordant pairs, and so for all."""
+    points = real_coverage.pair_points(RISKS, (0.0, 0.4))
+    found = real_coverage.of_pairs(method("pair_odds_ratio", "conditional-exact"), 12, points, level)
+    assert found.held.min() >= level
+
+
+@pytest.mark.parametrize("level", [0.8, 0.95])
+def test_exact_intervals_of_rates_never_cover_less_than_their_level(level: float) -> None:
+    """Garwood's interval at each expectation; that of the ratio at each pair of them."""
+    expected = (0.5, 2, 7, 20)
+    assert real_coverage.one_rate(method("rate", "exact"), expected, level).held.min() >= level
+    assert real_coverage.two_rates(method("rate_ratio", "exact"), (1.0, 2.5), expected, level).held.min() >= level
+
+
+def test_wald_of_pairs_covers_worse_than_newcombe() -> None:
+    """Newcombe (1998) Stat Med 17:2635: Wald's interval of pairs falls short of 95%, the hybrid score interval not."""
+    points = real_coverage.pair_points(RISKS, (0.0, 0.4))
+    wald, newcombe = (
+        real_coverage.of_pairs(method("pair_difference", key), 15, points, 0.95) for key in ("wald", "newcombe")
+    )
+    assert wald.held.mean() < 0.94 < 0.95 < newcombe.held.mean()
+    assert wald.held.min() < newcombe.held.min()
