@@ -7,6 +7,7 @@ from typing import NamedTuple
 from PySide6.QtGui import QAction, QKeySequence
 from PySide6.QtWidgets import QMainWindow, QMenu
 
+from fourcount.record.outcome import FORMS
 from fourcount.wording import labels
 
 Keys = QKeySequence.StandardKey | str | None
@@ -29,6 +30,7 @@ COMMANDS = (
     Command("quit", "file", Standard.Quit, parts_from_last=True),
     Command("undo", "edit", Standard.Undo),
     Command("redo", "edit", Standard.Redo),
+    Command("paste", "edit", "Ctrl+Shift+V", parts_from_last=True),
     Command("copy-text", "edit", "Ctrl+Shift+C", parts_from_last=True),
     Command("copy-table", "edit", "Ctrl+Shift+T"),
     Command("copy-picture", "edit", "Ctrl+Shift+P"),
@@ -36,10 +38,15 @@ COMMANDS = (
     Command("count-other", "table", "Ctrl+Shift+O"),
     Command("form", "table", "Ctrl+Shift+F", parts_from_last=True),
     Command("layout", "table", "Ctrl+Shift+L"),
+    Command("add-row", "table", "Ctrl+Return", parts_from_last=True),
+    Command("remove-row", "table", "Ctrl+Shift+Del"),
+    Command("clear", "table", "Ctrl+Shift+Backspace"),
     Command("first-cell", "table", "Ctrl+1", parts_from_last=True),
     Command("baseline", "table", "Ctrl+2"),
-    Command("clear", "table", "Ctrl+Shift+Backspace"),
-    Command("level", "table", "Ctrl+L"),
+    Command("paper", "table", "Ctrl+3"),
+    Command("level", "table", "Ctrl+L", parts_from_last=True),
+    Command("adopt", "table", "Ctrl+Shift+M"),
+    *(Command(f"form-{form}", "forms", f"F{number}") for number, form in enumerate(FORMS, start=2)),
     Command("bigger", "view", Standard.ZoomIn),
     Command("smaller", "view", Standard.ZoomOut),
     Command("actual", "view", "Ctrl+0"),
@@ -79,10 +86,13 @@ def make_actions(window: QMainWindow) -> dict[str, QAction]:
 def fill_menus(window: QMainWindow, actions: dict[str, QAction]) -> dict[str, QMenu]:
     """Hang the commands into the window's menus."""
     menus = {key: window.menuBar().addMenu(words) for key, words in labels.MENUS.items()}
+    menus["forms"] = QMenu(labels.FORM_MENU, window)
     for command in COMMANDS:
         if command.parts_from_last:
             menus[command.menu].addSeparator()
         menus[command.menu].addAction(actions[command.key])
+        if command.key == "form":
+            menus["table"].addMenu(menus["forms"])
     return menus
 
 

@@ -4,25 +4,33 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import Signal
+from PySide6.QtCore import Qt, Signal
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout
 
 from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.flow import FlowLayout
+from fourcount.face.form_choice import FormChoice
 from fourcount.face.grid import Grid
+from fourcount.face.grid_forms import GRID_FORMS
 from fourcount.face.links import Link
 from fourcount.face.look import Look
+from fourcount.face.rare_parts import RareParts
 from fourcount.face.text import Words
-from fourcount.record.outcome import EventsOfTotal, Outcome
+from fourcount.record.outcome import CELLS, Outcome, form_of
+from fourcount.record.paper import Choices
 from fourcount.wording import labels
 
 if TYPE_CHECKING:
-    from fourcount.appraisal.findings import OutcomeFindings
+    from fourcount.appraisal.findings import CheckFindings, OutcomeFindings
+
+LINKS = ("swap", "count-other", "clear", "paste")
+LONG_SPECIMENS = ("person-time", "risk-at-time", "effect-only")
+"""Forms whose specimen needs a line of its own; which way groups run then stands under it."""
 
 
 class AsPrinted(FieldsView):
-    """Study, event, time span and the grid.
+    """Study, event, time span and the table; further parts are made by ``RareParts`` when they are first needed.
 
     **Signals**
         example_wanted: the quiet line of the first start was pressed.
@@ -33,23 +41,35 @@ class AsPrinted(FieldsView):
     def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
         super().__init__()
         self._look = look
+        self._long: bool | None = None
         self.setAccessibleName(labels.COLUMNS["printed"])
         self.design = ChoiceField(look, labels.FIELDS["design"], tuple(labels.DESIGNS.items()))
         self.name = TextField(look, "name_text", labels.FIELDS["name_text"], labels.HINTS["name_text"])
         self.event_words = TextField(look, "left_words_text", labels.FIELDS["left_words_text"], labels.HINTS["words"])
         self.welcome = ChoiceField(look, labels.FIELDS["welcome"], tuple(labels.WELCOME.items()), whole=True)
         self.span = TextField(look, "span_text", labels.FIELDS["span_text"], labels.HINTS["span_text"])
-        self.form = ChoiceField(look, labels.FIELDS["form"], tuple(labels.FORMS.items()))
+        self.form = FormChoice(look)
         self.layout_choice = ChoiceField(look, labels.FIELDS["layout"], tuple(labels.LAYOUTS.items()))
         self.grid = Grid(look)
         self.notes = Words(look, "small", "caution")
         self.example = Link(look, labels.FIRST_STEP)
-        self.links = [Link(look, labels.LINK_WORDS[key], actions[key]) for key in ("swap", "count-other", "clear")]
+        self.links = [
+            Link(look, labels.LINK_WORDS[key], actions[key], labels.LINK_NAMES.get(key, "")) for key in LINKS
+        ]
         self._build()
+        self.rare = RareParts(self, look, actions, self._column, self._form_rows)
+        self._pass_on(self.rare)
         self._connect_all()
+
+    @property
+    def fields(self) -> tuple[TextField, ...]:
+        """Every field of the column that was made so far, in reading order."""
+        own = (self.name, self.event_words, self.span)
+        return (*own, *self.rare.fields_before, *self.grid.fields, *self.rare.fields_after)
 
     def show_state(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
         """Show the outcome as typed, and a sentence for each marked cell."""
+        form = form_of(outcome.table)
         self.design.show_choice(outcome.design)
         self.event_words.field = f"{outcome.counted}_words_text"
         self.event_words.show_text(outcome.event_words_text)
@@ -59,11 +79,33 @@ class AsPrinted(FieldsView):
         self._names["name_text"].show_words(labels.FIELDS["name_text" if left else "other_than"])
         self.welcome.show_choice("welcome" if outcome.welcome else "unwelcome")
         self.span.show_text(outcome.span_text)
-        self.form.show_choice("events-of-total" if isinstance(outcome.table, EventsOfTotal) else "events-and-others")
+        self.form.show_choice(form)
         self.layout_choice.show_choice(outcome.layout)
+        self.layout_choice.setVisible(form in GRID_FORMS and form != "pairs")
+        self._place_layout_choice(form in LONG_SPECIMENS)
+        self.grid.setVisible(form in GRID_FORMS)
         self.grid.show_state(outcome, findings)
         self.example.setVisible(outcome == Outcome())
+        self.rare.show_state(outcome, findings, self._names["left_words_text"].width())
         self._show_marks(findings)
+
+    def show_check(self, outcome: Outcome, check: CheckFindings | None, choices: Choices) -> None:
+        """Show what the paper says and whether it adds up."""
+        self.rare.show_check(outcome, check, choices, self._names["left_words_text"].width())
+
+    def field_named(self, key: str) -> TextField | None:
+        """The field of this column with a key, its row opened where it has one."""
+        self.rare.open_for(key)
+        return next((field for field in self.fields if field.field == key and not field.isHidden()), None)
+
+    @property
+    def first_field(self) -> TextField:
+        """Where typing the table begins in its form."""
+        return self.rare.first_field or self.grid.cells[CELLS[0]]
+
+    def paper_field(self, outcome: Outcome, choices: Choices) -> TextField:
+        """The field of what the paper says, made if it is not there yet."""
+        return self.rare.paper_field(outcome, choices, self._names["left_words_text"].width())
 
     def _event_hint(self, outcome: Outcome) -> str:
         """What the event is called while nothing is typed: that it is not the other one, where that is named."""
@@ -79,9 +121,11 @@ class AsPrinted(FieldsView):
             from fourcount.wording.gaps import mark_text
 
             reasons = {mark.field: mark_text(mark) for mark in findings.marks}
-        for field, cell in self.grid.cells.items():
-            cell.show_mark(reasons.get(field, ""))
-        self.notes.show_words("\n".join(text for field, text in reasons.items() if field in self.grid.cells))
+        told = [field.field for field in self.grid.fields]
+        for field in self.grid.fields:
+            field.show_mark(reasons.get(field.field, ""))
+        told += self.rare.show_marks(reasons)
+        self.notes.show_words("\n".join(dict.fromkeys(text for field, text in reasons.items() if field in told)))
 
     def _build(self) -> None:
         self._form_rows = QGridLayout()
@@ -96,11 +140,10 @@ class AsPrinted(FieldsView):
         self._form_rows.addWidget(self.welcome, 1, 2)
         self._form_rows.addWidget(self.event_words, 2, 1, 1, 2)
         self._form_rows.addWidget(self.span, 3, 1, 1, 2)
-        printed = QHBoxLayout()
-        printed.addWidget(self.form, 3)
-        printed.addWidget(self.layout_choice, 3)
-        self._printed_row = printed
-        self._form_rows.addLayout(printed, 4, 1, 1, 2)
+        self._printed_row = QHBoxLayout()
+        self._printed_row.addWidget(self.form, 3)
+        self._printed_row.addWidget(self.layout_choice, 3)
+        self._form_rows.addLayout(self._printed_row, 4, 1, 1, 2)
         links = FlowLayout(self._look)
         for link in self.links:
             links.addWidget(link)
@@ -113,6 +156,15 @@ class AsPrinted(FieldsView):
         self._column.addWidget(self.example)
         self._column.addStretch(1)
         self._on_look_changed()
+
+    def _place_layout_choice(self, long: bool) -> None:
+        """Beside the specimen, or under a long one."""
+        if self._long != long:
+            self._long = long
+            if long:
+                self._form_rows.addWidget(self.layout_choice, 5, 1, 1, 2, Qt.AlignmentFlag.AlignLeft)
+            else:
+                self._printed_row.addWidget(self.layout_choice, 3)
 
     def _connect_all(self) -> None:
         self._pass_on(self.name, self.event_words, self.span, self.grid)

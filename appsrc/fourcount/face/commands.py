@@ -2,7 +2,8 @@
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING
+from collections.abc import Callable
+from typing import TYPE_CHECKING, Any, cast
 
 from PySide6.QtCore import QObject, Signal
 from PySide6.QtWidgets import QWidget
@@ -11,12 +12,24 @@ from fourcount.face import clipboard, dialogs
 from fourcount.face.session import Session
 from fourcount.ink.style import Style
 from fourcount.record import editing
-from fourcount.record.outcome import Design, Effect, EventsAndOthers, EventsOfTotal, Layout
+from fourcount.record.outcome import Design, Effect, Form, Layout
 from fourcount.record.paper import Choices, Family, Record
 from fourcount.wording import labels, numbers
 
 if TYPE_CHECKING:
+    from fourcount.appraisal.findings import CheckFindings
     from fourcount.face.for_one_patient import PictureView
+
+
+CHOOSING: dict[str, Callable[..., Any]] = {
+    "counting": editing.with_counting,
+    "follow_up_varied": editing.with_follow_up_varied,
+    "where": editing.with_where,
+    "adjusted_measure": editing.with_adjusted_measure,
+    "paper_measure": editing.with_paper_measure,
+    "of_total": editing.with_of_total,
+}
+"""What takes the choices of rows that are not always there."""
 
 
 class Commands(QObject):
@@ -65,11 +78,6 @@ class Commands(QObject):
         self._session.change_outcome(editing.clear_table(self._session.outcome))
         self.cell_wanted.emit()
 
-    def change_form(self) -> None:
-        """Go from ``38 · 374`` to ``38 of 412``, or back."""
-        now = self._session.outcome.table
-        self.choose_form("events-and-others" if isinstance(now, EventsOfTotal) else "events-of-total")
-
     def change_layout(self) -> None:
         """Run the groups the other way."""
         self.choose_layout("across" if self._session.outcome.layout == "down" else "down")
@@ -82,10 +90,28 @@ class Commands(QObject):
         """Say whether the counted outcome is a good one."""
         self._session.change_outcome(editing.with_welcome(self._session.outcome, key == "welcome"))
 
-    def choose_form(self, key: str) -> None:
+    def choose_form(self, key: Form) -> None:
         """Take a form of print by its key."""
-        kind = EventsOfTotal if key == "events-of-total" else EventsAndOthers
-        self._session.change_outcome(editing.in_form(self._session.outcome, kind))
+        self._session.change_outcome(editing.in_form(self._session.outcome, key))
+
+    def choose(self, field: str, choice: object) -> None:
+        """Take what was chosen in one of the column's rarer choices."""
+        self._session.change_outcome(CHOOSING[field](self._session.outcome, choice))
+
+    def add_row(self) -> None:
+        """One more row of strata."""
+        self._session.change_outcome(editing.add_stratum(self._session.outcome))
+
+    def remove_row(self, place: int) -> None:
+        """Take a row of strata out."""
+        self._session.change_outcome(editing.remove_stratum(self._session.outcome, place))
+
+    def adopt(self, found: CheckFindings | None) -> None:
+        """Take the family and the level under which the figures are the paper's, as one step."""
+        if found and found.adopt:
+            family, level = found.adopt
+            record = editing.with_level(self._session.record, level)
+            self._session.change_record(editing.with_family(record, cast("Family", family)))
 
     def choose_layout(self, key: Layout) -> None:
         """Run the groups down or across."""

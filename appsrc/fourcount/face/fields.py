@@ -2,10 +2,21 @@
 
 from __future__ import annotations
 
-from collections.abc import Sequence
+from collections.abc import Callable, Sequence
 
 from PySide6.QtCore import QEvent, QRect, QSize, Qt, Signal
-from PySide6.QtGui import QContextMenuEvent, QFocusEvent, QKeyEvent, QKeySequence, QPainter, QPaintEvent, QPen
+from PySide6.QtGui import (
+    QAction,
+    QContextMenuEvent,
+    QDropEvent,
+    QFocusEvent,
+    QGuiApplication,
+    QKeyEvent,
+    QKeySequence,
+    QPainter,
+    QPaintEvent,
+    QPen,
+)
 from PySide6.QtWidgets import QComboBox, QLineEdit, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
@@ -33,10 +44,12 @@ class TextField(QLineEdit):
     **Signals**
         edited: a person changed the text. Carries the field's key and the text.
         left: the field lost focus. Carries its key.
+        entered: the field got the focus. Carries its key.
     """
 
     edited = Signal(str, str)
     left = Signal(str)
+    entered = Signal(str)
 
     def __init__(self, look: Look, field: str, name: str, hint: str = "", role: Role = "body") -> None:
         super().__init__()
@@ -89,17 +102,50 @@ class TextField(QLineEdit):
         if any(event.matches(key) for key in UNDOING):
             event.ignore()
             return
+        if event.matches(QKeySequence.StandardKey.Paste):
+            self.paste_text()
+            return
         super().keyPressEvent(event)
+
+    def dropEvent(self, event: QDropEvent) -> None:
+        text = event.mimeData().text()
+        if event.source() is self or not self._taken_as_table(text):
+            super().dropEvent(event)
+        else:
+            event.acceptProposedAction()
+
+    def paste_text(self) -> None:
+        """Paste what is on the clipboard: a table where this part of the window takes one, else text as ever."""
+        if not self._taken_as_table(QGuiApplication.clipboard().text()):
+            self.paste()
+
+    def _taken_as_table(self, text: str) -> bool:
+        parent = self.parentWidget()
+        while parent is not None:
+            if isinstance(parent, FieldsView) and parent.take_table is not None:
+                return parent.take_table(self.field, text)
+            parent = parent.parentWidget()
+        return False
 
     def contextMenuEvent(self, event: QContextMenuEvent) -> None:
         menu = self.createStandardContextMenu()
         for action in menu.actions():
             if action.objectName() in ("edit-undo", "edit-redo"):
                 menu.removeAction(action)
+            elif action.objectName() == "edit-paste":
+                ours = QAction(action.text(), menu)
+                ours.setEnabled(action.isEnabled())
+                ours.triggered.connect(self.paste_text)
+                menu.insertAction(action, ours)
+                menu.removeAction(action)
         if menu.actions() and menu.actions()[0].isSeparator():
             menu.removeAction(menu.actions()[0])
         menu.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose)
         menu.popup(event.globalPos())
+
+    def focusInEvent(self, event: QFocusEvent) -> None:
+        super().focusInEvent(event)
+        self.entered.emit(self.field)
 
     def focusOutEvent(self, event: QFocusEvent) -> None:
         super().focusOutEvent(event)
@@ -153,10 +199,13 @@ class FieldsView(QWidget):
     **Signals**
         edited: a person changed a text. Carries the field and the text.
         left: a field lost focus. Carries the field.
+
+    ``take_table`` is asked about a text that is pasted or dropped into one of the fields; it says whether it took it.
     """
 
     edited = Signal(str, str)
     left = Signal(str)
+    take_table: Callable[[str, str], bool] | None = None
 
     def _pass_on(self, *fields: TextField | FieldsView) -> None:
         """Speak for these fields, or for another part that holds some."""
@@ -182,12 +231,14 @@ class ChoiceField(QComboBox):
         prefix: str = "",
         plain: bool = False,
         whole: bool = False,
+        snug: bool = False,
     ) -> None:
         super().__init__()
         self._look = look
         self._prefix = prefix
         self._plain = plain
-        self._whole = whole
+        self._whole = whole or snug
+        self._snug = plain or snug
         for key, text in choices:
             self.addItem(text, key)
         self.setAccessibleName(name)
@@ -195,7 +246,7 @@ class ChoiceField(QComboBox):
         self.setMinimumWidth(0)
         self.setSizeAdjustPolicy(QComboBox.SizeAdjustPolicy.AdjustToMinimumContentsLengthWithIcon)
         fixed = QSizePolicy.Policy.Fixed
-        self.setSizePolicy(fixed if plain else QSizePolicy.Policy.Expanding, fixed)
+        self.setSizePolicy(fixed if self._snug else QSizePolicy.Policy.Expanding, fixed)
         self.activated.connect(self._on_activated)
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
@@ -221,7 +272,7 @@ class ChoiceField(QComboBox):
     def sizeHint(self) -> QSize:
         widest = max((self.fontMetrics().horizontalAdvance(self.itemText(i)) for i in range(self.count())), default=0)
         shown = self.fontMetrics().horizontalAdvance(self._prefix + self.currentText())
-        return QSize((shown if self._plain else widest) + self._look.px(17), self._look.px(26 if self._plain else 30))
+        return QSize((shown if self._snug else widest) + self._look.px(17), self._look.px(26 if self._plain else 30))
 
     def minimumSizeHint(self) -> QSize:
         return self.sizeHint() if self._plain or self._whole else QSize(self._look.px(56), self._look.px(30))

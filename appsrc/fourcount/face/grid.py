@@ -4,112 +4,38 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QRectF, QSize, Qt, Signal
-from PySide6.QtGui import QFocusEvent, QFontMetrics, QKeyEvent, QPainter, QPaintEvent, QPen, QResizeEvent
+from PySide6.QtCore import Qt
 from PySide6.QtWidgets import QGridLayout, QLabel, QSizePolicy, QWidget
 
+from fourcount.face.cell import CountCell
 from fourcount.face.fields import FieldsView, QuietField, TextField
+from fourcount.face.grid_forms import GRID_FORMS, GridForm
 from fourcount.face.look import Look
-from fourcount.ink.style import Role
-from fourcount.record.outcome import CELLS, EventsOfTotal, Outcome
+from fourcount.record.outcome import CELLS, Form, Outcome, form_of
 from fourcount.wording import labels
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
 
-CELL_ROLES: tuple[Role, ...] = ("cell", "total", "body", "small")
 LONGEST_IN_FULL = 7
 """Totals of more characters than this are all set smaller, so that the grid keeps its shape."""
 
 RIGHT = Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter
 
 
-class CountCell(TextField):
-    """One count, in a frame of its own.
-
-    **Signals**
-        moved: an arrow key or Enter asks for another cell. Carries this cell's field and the key.
-    """
-
-    moved = Signal(str, object)
-
-    def __init__(self, look: Look, field: str) -> None:
-        super().__init__(look, field, "", role="cell")
-        self.setAlignment(Qt.AlignmentFlag.AlignRight)
-
-    def sizeHint(self) -> QSize:
-        return QSize(self._look.px(84), self._look.px(40))
-
-    def minimumSizeHint(self) -> QSize:
-        return QSize(self._look.px(60), self._look.px(40))
-
-    def show_text(self, text: str) -> None:
-        super().show_text(text)
-        self._fit_text()
-
-    def show_known(self, text: str) -> None:
-        """Show in an empty cell the number that is known already from what stands beside it."""
-        if text != self.placeholderText():
-            self.setPlaceholderText(text)
-
-    def resizeEvent(self, event: QResizeEvent) -> None:
-        super().resizeEvent(event)
-        self._fit_text()
-
-    def keyPressEvent(self, event: QKeyEvent) -> None:
-        key = Qt.Key(event.key())
-        plain = not event.modifiers() & ~Qt.KeyboardModifier.KeypadModifier
-        at_start = self.cursorPosition() == 0 and not self.hasSelectedText()
-        at_end = self.cursorPosition() == len(self.text())
-        leaves = (
-            key in (Qt.Key.Key_Up, Qt.Key.Key_Down, Qt.Key.Key_Return, Qt.Key.Key_Enter)
-            or (key == Qt.Key.Key_Left and at_start)
-            or (key == Qt.Key.Key_Right and at_end)
-        )
-        if plain and leaves:
-            self.moved.emit(self.field, key)
-            return
-        super().keyPressEvent(event)
-
-    def _fit_text(self) -> None:
-        """Set a long text in a smaller size, so that it is seen whole."""
-        self.setTextMargins(self._look.px(6), 0, self._look.px(8), 0)
-        room = self.width() - self._look.px(18) - (self._look.px(8) if self.marked else 0)
-        for role in CELL_ROLES:
-            font = self._look.font(role)
-            if QFontMetrics(font).horizontalAdvance(self.text()) <= room:
-                break
-        if font != self.font():
-            self.setFont(font)
-
-    def focusInEvent(self, event: QFocusEvent) -> None:
-        super().focusInEvent(event)
-        if event.reason() in (Qt.FocusReason.TabFocusReason, Qt.FocusReason.BacktabFocusReason):
-            self.selectAll()
-
-    def paintEvent(self, event: QPaintEvent) -> None:
-        super(TextField, self).paintEvent(event)
-        part = "caution" if self.marked else "accent" if self.hasFocus() else "outline"
-        width = 2.0 if self.marked or self.hasFocus() else 1.0
-        painter = QPainter(self)
-        painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-        painter.setPen(QPen(self._look.colour(part), width))
-        inset = width / 2
-        painter.drawRoundedRect(QRectF(self.rect()).adjusted(inset, inset, -inset, -inset), 4, 4)
-        text = self.fontMetrics().horizontalAdvance(self.text())
-        if self.marked and text + self._look.px(28) < self.width():
-            painter.setFont(self._look.font("strong"))
-            painter.drawText(self.rect().adjusted(8, 0, 0, 0), Qt.AlignmentFlag.AlignVCenter, "!")
-        painter.end()
-
-
 class Grid(FieldsView):
-    """Two groups by two outcomes, as the paper prints them: groups down or across, others or totals typed."""
+    """Two groups by two columns, as the paper prints them: groups down or across.
+
+    The widgets of rarer forms (a unit, the level of limits, notes under cells) are made on first use.
+    """
 
     def __init__(self, look: Look) -> None:
         super().__init__()
         self._look = look
-        self._arranged: tuple[str, bool] | None = None
+        self._arranged: tuple[str, Form] | None = None
+        self._rare: dict[str, TextField] = {}
+        self.notes: dict[str, QLabel] = {}
+        self.row_heads: dict[str, QLabel] = {}
         self.cells = {field: CountCell(look, field) for field in CELLS}
         self.labels = {
             position: QuietField(
@@ -132,27 +58,58 @@ class Grid(FieldsView):
         self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
         self._connect_all()
 
+    @property
+    def fields(self) -> tuple[TextField, ...]:
+        """Every field of the grid that was made so far, in reading order."""
+        return (*self.headings.values(), *self._rare.values(), *self.labels.values(), *self.cells.values())
+
     def show_state(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
-        """Show the texts, which column is counted, and the totals."""
-        of_total = isinstance(outcome.table, EventsOfTotal)
-        self._arrange(outcome.layout, of_total)
-        for field, cell in self.cells.items():
-            cell.show_text(getattr(outcome.table, field))
+        """Show the texts, which column is counted, and the totals; nothing where the form has no four cells."""
+        form = form_of(outcome.table)
+        if form not in GRID_FORMS:
+            return
+        self._arrange("down" if form == "pairs" else outcome.layout, form)
+        for field, cell in (*self.cells.items(), *self._rare.items()):
+            cell.show_text(getattr(outcome.table, field, ""))
         for position, label in self.labels.items():
             label.show_text(getattr(outcome, f"{position}_label_text"))
         for column, heading in self.headings.items():
             heading.show_text(getattr(outcome, f"{column}_heading_text"))
         self._show_hints(outcome)
         self._show_roles(outcome)
-        self._show_names(outcome, of_total)
-        self._show_totals(findings, of_total)
+        self._show_names(outcome, GRID_FORMS[form])
+        self._show_totals(findings, GRID_FORMS[form])
+        if form == "pairs":
+            from fourcount.face.printed.pair_grid import show_pairs
+
+            show_pairs(self, outcome)
+        elif form == "percent-of-total":
+            from fourcount.face.printed.percent_grid import show_counts
+
+            show_counts(self, findings)
+
+    def note(self, field: str) -> QLabel:
+        """The small line under a cell."""
+        if field not in self.notes:
+            self.notes[field] = self._small(RIGHT)
+            self._dress()
+        return self.notes[field]
+
+    def row_head(self, column: str) -> QLabel:
+        """The name of a row that repeats the heading of a column, as a table of pairs has it."""
+        if column not in self.row_heads:
+            self.row_heads[column] = self._small()
+            self._dress()
+        return self.row_heads[column]
 
     def _show_hints(self, outcome: Outcome) -> None:
-        cases = outcome.design == "case-control"
+        kind = {"case-control": "_cases", "matched": "_exposed"}.get(outcome.design, "")
         for column, heading in self.headings.items():
             words = getattr(outcome, f"{column}_words_text").strip()
-            hint = labels.HINTS[f"{column}_heading_cases" if cases else f"{column}_heading"]
-            heading.setPlaceholderText(words or hint)
+            heading.setPlaceholderText(words or labels.HINTS[f"{column}_heading{kind}"])
+        for label in self.labels.values():
+            if form_of(outcome.table) != "pairs":
+                label.setPlaceholderText(labels.HINTS["label"])
 
     def _show_roles(self, outcome: Outcome) -> None:
         for position in ("first", "second"):
@@ -161,43 +118,34 @@ class Grid(FieldsView):
         for column in ("left", "right"):
             self.roles[column].setText(labels.ROLES["counted"] if outcome.counted == column else "")
 
-    def _show_names(self, outcome: Outcome, of_total: bool) -> None:
+    def _show_names(self, outcome: Outcome, kind: GridForm) -> None:
+        if "pairs" in kind.names:
+            return
         for field, cell in self.cells.items():
             position, column = field.split("_")[:2]
             group = getattr(outcome, f"{position}_label_text").strip() or labels.GROUP_NAMES[position]
             heading = self.headings[column]
             words = heading.text().strip() or heading.placeholderText()
-            pattern = labels.CELL_NAMES[column] if of_total else labels.CELL_NAMES["events-and-others"]
+            pattern = labels.CELL_NAMES[kind.names[0 if column == "left" else 1]]
             name = pattern.format(group=group, outcome=words)
             if name != cell.accessibleName():
                 cell.setAccessibleName(name)
 
-    def _show_totals(self, findings: OutcomeFindings | None, of_total: bool) -> None:
+    def _show_totals(self, findings: OutcomeFindings | None, kind: GridForm) -> None:
         from fourcount.wording.numbers import whole
 
         totals = findings.totals if findings else None
-        self._show_known(findings, of_total)
 
         def words(key: str) -> str:
-            value = getattr(totals, key) if totals else None
+            value = getattr(totals, key) if totals and key else None
             return "" if value is None else whole(value)
 
-        groups = ("first_right", "second_right") if of_total else ("first", "second")
-        for position, key in zip(("first", "second"), groups, strict=True):
+        for position, key, known in zip(("first", "second"), kind.sides, kind.known, strict=True):
             self.totals[position].setText(words(key))
-        right, everyone = ("everyone", "right") if of_total else ("right", "everyone")
-        self.totals["left"].setText(words("left"))
-        self.totals["right"].setText(words(right))
-        self.totals["everyone"].setText(words(everyone))
+            self.cells[f"{position}_right_text"].show_known(words(known))
+        for key, foot in zip(("left", "right", "everyone"), kind.feet, strict=True):
+            self.totals[key].setText(words(foot))
         self._fit_totals()
-
-    def _show_known(self, findings: OutcomeFindings | None, of_total: bool) -> None:
-        """Fill an empty right cell, as a hint, where its number follows from a left one such as 38/412."""
-        from fourcount.wording.numbers import whole
-
-        for position in ("first", "second"):
-            value = getattr(findings.totals, position if of_total else f"{position}_right") if findings else None
-            self.cells[f"{position}_right_text"].show_known("" if value is None else whole(value))
 
     def _fit_totals(self) -> None:
         """Set all totals smaller where one of them is long."""
@@ -207,44 +155,87 @@ class Grid(FieldsView):
             if label.font() != font:
                 label.setFont(font)
 
-    def _arrange(self, layout: str, of_total: bool) -> None:
+    def _arrange(self, layout: str, form: Form) -> None:
         """Place the widgets in blocks, typed columns first and what follows from them last; across, transposed."""
-        if self._arranged == (layout, of_total):
+        if self._arranged == (layout, form):
             return
-        self._arranged = (layout, of_total)
+        self._arranged = (layout, form)
         while self._layout.count():
             self._layout.takeAt(0)
-        middle = (self.total_heading, None) if of_total else (self.headings["right"], self.roles["right"])
-        last = (self.headings["right"], self.roles["right"]) if of_total else (self.total_heading, None)
-        heads = ((self.headings["left"], self.roles["left"]), middle, last)
-        for column, (heading, role) in enumerate(heads, start=1):
-            self._place(0, column, heading, role)
-        for row, position in enumerate(("first", "second"), start=1):
-            self._place(row, 0, self.labels[position], self.roles[position])
-            for column, part in ((1, "left"), (2, "right")):
-                self._place(row, column, self.cells[f"{position}_{part}_text"])
-            self._place(row, 3, self.totals[position])
-        for column, key in ((1, "left"), (2, "right"), (3, "everyone")):
-            self._place(3, column, self.totals[key])
-        for column, stretch in enumerate((6, 5, 5, 4) if of_total else (7, 5, 5, 2)):
+        kind = GRID_FORMS[form]
+        if form == "pairs":
+            from fourcount.face.printed.pair_grid import place_pairs
+
+            place_pairs(self, self._layout)
+        else:
+            self._place_groups(kind, form)
+        self._layout.setRowMinimumHeight(11, self._look.px(8) if form == "pairs" else 0)
+        for column, stretch in enumerate(kind.stretches):
             self._layout.setColumnStretch(column, stretch)
         self._set_alignment(layout)
+        for widget in self._widgets():
+            widget.setVisible(self._layout.indexOf(widget) >= 0)
         before: QWidget = self.labels["second"]
         for field in self._reading_order():
             self.setTabOrder(before, self.cells[field])
             before = self.cells[field]
+
+    def _place_groups(self, kind: GridForm, form: Form) -> None:
+        """A row for each group, a column for what is typed of it."""
+        for column, head in enumerate(kind.heads, start=1):
+            if head:
+                self._place(0, column, *self._head(head))
+        for row, position in enumerate(("first", "second"), start=1):
+            self._place(row, 0, self.labels[position], self.roles[position])
+            for column, part in ((1, "left"), (2, "right")):
+                self._place(row, column, self.cells[f"{position}_{part}_text"])
+            if form == "percent-of-total":
+                self._place(row, 1, self.note(f"{position}_left_text"), line=2)
+            if kind.sides[0]:
+                self._place(row, 3, self.totals[position])
+        for column, key in ((1, "left"), (2, "right"), (3, "everyone")):
+            if kind.feet[column - 1]:
+                self._place(3, column, self.totals[key])
+
+    def _head(self, key: str) -> tuple[QWidget, QWidget | None]:
+        """The head of a column, and the small line under it."""
+        if key == "total":
+            return self.total_heading, None
+        if key == "unit":
+            return self._rare_field("unit_text"), None
+        if key == "limits":
+            head = self.row_head("limits")
+            head.setText(labels.LIMITS)
+            head.setAlignment(RIGHT)
+            return head, self._rare_field("limits_level_text")
+        return self.headings[key], self.roles[key]
+
+    def _rare_field(self, field: str) -> TextField:
+        if field not in self._rare:
+            made = QuietField(self._look, field, labels.FIELDS[field], labels.HINTS[field], role="small")
+            made.setAlignment(Qt.AlignmentFlag.AlignRight)
+            self._pass_on(made)
+            self._rare[field] = made
+            self.setTabOrder(self.headings["right"], made)
+        return self._rare[field]
+
+    def _widgets(self) -> tuple[QWidget, ...]:
+        return (
+            *self.fields, *self.roles.values(), self.total_heading, *self.totals.values(), *self.notes.values(),
+            *self.row_heads.values(),
+        )  # fmt: skip
 
     def _reading_order(self) -> tuple[str, ...]:
         """The cells line by line, as they stand."""
         across = self._arranged is not None and self._arranged[0] == "across"
         return (CELLS[0], CELLS[2], CELLS[1], CELLS[3]) if across else CELLS
 
-    def _place(self, row: int, column: int, widget: QWidget, under: QWidget | None = None) -> None:
+    def _place(self, row: int, column: int, widget: QWidget, under: QWidget | None = None, line: int = 0) -> None:
         """Put a widget into a block of the upright grid, with a small line under it or over the block's height."""
         if self._arranged and self._arranged[0] == "across":
             row, column = column, row
-        one_line = row == 0 or under is not None
-        self._layout.addWidget(widget, 3 * row, column, 1 if one_line else 2, 1)
+        one_line = row == 0 or under is not None or line > 0
+        self._layout.addWidget(widget, 3 * row + line, column, 1 if one_line else 2, 1)
         if under:
             self._layout.addWidget(under, 3 * row + 1, column)
 
@@ -311,9 +302,14 @@ class Grid(FieldsView):
         for block in range(3):
             self._layout.setRowMinimumHeight(3 * block + 2, px(8))
         self._layout.setColumnMinimumWidth(0, px(84))
-        palette = self._look.text_palette("muted")
-        for label in (*self.roles.values(), self.total_heading, *self.totals.values()):
-            label.setPalette(palette)
-        for label in (*self.roles.values(), self.total_heading):
-            label.setFont(self._look.font("small"))
+        self._dress()
         self._fit_totals()
+
+    def _dress(self) -> None:
+        """Give every small word its colour and size."""
+        palette, small = self._look.text_palette("muted"), self._look.font("small")
+        for label in self.totals.values():
+            label.setPalette(palette)
+        for label in (*self.roles.values(), self.total_heading, *self.notes.values(), *self.row_heads.values()):
+            label.setPalette(palette)
+            label.setFont(small)

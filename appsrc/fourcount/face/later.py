@@ -5,36 +5,53 @@ from __future__ import annotations
 import threading
 from collections.abc import Callable
 from contextlib import suppress
+from functools import partial
 from importlib import import_module
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QObject, Qt, Signal, SignalInstance
 
 if TYPE_CHECKING:
+    from fourcount.appraisal.findings import CheckFindings, OutcomeFindings
     from fourcount.record.outcome import Outcome
     from fourcount.record.paper import Choices
 
+    Asked = tuple[Outcome, Choices]
+    Answer = OutcomeFindings | CheckFindings
+
+
+class _Lane:
+    """Requests of one kind: while one is worked on, the newest waits and older ones are dropped."""
+
+    def __init__(self, answer: Callable[[Outcome, Choices], Answer], arrived: SignalInstance) -> None:
+        self.answer = answer
+        self.arrived = arrived
+        self.wanted: Asked | None = None
+        self.busy = False
+
 
 class Later(QObject):
-    """One thread loads the libraries, one computes; of several requests only the newest is computed.
+    """One thread loads the libraries, one computes, one checks; of several requests only the newest is answered.
 
     A thread must not outlive the interpreter, which would abort on it: ``finish`` waits for both.
 
     **Signals**
         arrived: figures are there. Carries the outcome, the choices and the findings they belong to.
+        checked: what the paper prints was checked. Carries the outcome, the choices and what was found.
         loaded: the numerical libraries are loaded.
         failed: computing raised an error. Carries the error.
     """
 
     arrived = Signal(object, object, object)
+    checked = Signal(object, object, object)
     loaded = Signal()
     failed = Signal(object)
 
     def __init__(self, parent: QObject | None = None) -> None:
         super().__init__(parent)
-        self._wanted: tuple[Outcome, Choices] | None = None
         self._lock = threading.Lock()
-        self._busy = False
+        self._figures = _Lane(_appraised, self.arrived)
+        self._checks = _Lane(_checked, self.checked)
         self._closed = False
         self._threads: list[threading.Thread] = []
         self.failed.connect(self._on_failed, Qt.ConnectionType.QueuedConnection)
@@ -45,18 +62,17 @@ class Later(QObject):
 
     def ask(self, outcome: Outcome, choices: Choices) -> None:
         """Compute all figures of an outcome, however long they take."""
-        with self._lock:
-            self._wanted = (outcome, choices)
-            if self._busy:
-                return
-            self._busy = True
-        self._start(self._compute)
+        self._ask(self._figures, (outcome, choices))
+
+    def ask_check(self, outcome: Outcome, choices: Choices) -> None:
+        """Find out whether what the paper prints follows from its counts."""
+        self._ask(self._checks, (outcome, choices))
 
     def close(self) -> None:
         """Answer nothing any more."""
         with self._lock:
             self._closed = True
-            self._wanted = None
+            self._figures.wanted = self._checks.wanted = None
 
     def finish(self, seconds: float) -> bool:
         """Wait for the threads to end, so many seconds at most for each; whether they did."""
@@ -78,17 +94,23 @@ class Later(QObject):
         except Exception as error:  # noqa: BLE001 - whatever it is, the window's thread reports it
             self._tell(self.failed, error)
 
-    def _compute(self) -> None:
-        from fourcount.appraisal.appraise import appraise
+    def _ask(self, lane: _Lane, asked: Asked) -> None:
+        with self._lock:
+            lane.wanted = asked
+            if lane.busy:
+                return
+            lane.busy = True
+        self._start(partial(self._work, lane))
 
+    def _work(self, lane: _Lane) -> None:
         while True:
             with self._lock:
-                wanted, self._wanted = self._wanted, None
+                wanted, lane.wanted = lane.wanted, None
                 if wanted is None:
-                    self._busy = False
+                    lane.busy = False
                     return
             try:
-                self._tell(self.arrived, *wanted, appraise(*wanted))
+                self._tell(lane.arrived, *wanted, lane.answer(*wanted))
             except Exception as error:  # noqa: BLE001 - whatever it is, the window's thread reports it
                 self._tell(self.failed, error)
 
@@ -102,3 +124,15 @@ class Later(QObject):
 
     def _on_failed(self, error: BaseException) -> None:
         raise error
+
+
+def _appraised(outcome: Outcome, choices: Choices) -> OutcomeFindings:
+    from fourcount.appraisal.appraise import appraise
+
+    return appraise(outcome, choices)
+
+
+def _checked(outcome: Outcome, choices: Choices) -> CheckFindings:
+    from fourcount.appraisal.check import check
+
+    return check(outcome, choices)

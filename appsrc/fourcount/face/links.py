@@ -12,11 +12,11 @@ from fourcount.face.look import Look
 class Link(QAbstractButton):
     """A command as words to click, to reach with Tab and to press with Space or Enter."""
 
-    def __init__(self, look: Look, words: str, action: QAction | None = None) -> None:
+    def __init__(self, look: Look, words: str, action: QAction | None = None, name: str = "") -> None:
         super().__init__()
         self._look = look
         self.setText(words)
-        self.setAccessibleName(words)
+        self.setAccessibleName(name or words)
         self.setCursor(Qt.CursorShape.PointingHandCursor)
         self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
         self.setSizePolicy(QSizePolicy.Policy.Fixed, QSizePolicy.Policy.Fixed)
@@ -24,7 +24,7 @@ class Link(QAbstractButton):
         if action:
             self.clicked.connect(action.trigger)
             self._shortcut = action.shortcut().toString(action.shortcut().SequenceFormat.NativeText)
-            self.setToolTip(f"{words}  {self._shortcut}".strip())
+            self.setToolTip(f"{name or words}  {self._shortcut}".strip())
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 
@@ -55,11 +55,14 @@ class Link(QAbstractButton):
         painter.setFont(font)
         painter.setPen(QPen(self._look.colour("accent")))
         words = self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, self.width())
-        painter.drawText(self.rect(), Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter, words)
+        painter.drawText(self.rect(), self._alignment(), words)
         if self.hasFocus():
             painter.setPen(QPen(self._look.colour("accent"), 1, Qt.PenStyle.DotLine))
             painter.drawRect(self.rect().adjusted(0, 0, -1, -1))
         painter.end()
+
+    def _alignment(self) -> Qt.AlignmentFlag:
+        return Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter
 
     def _on_look_changed(self) -> None:
         self.setFont(self._look.font("body"))

@@ -14,18 +14,20 @@ from fourcount.face import actions as commands_table
 from fourcount.face import dialogs
 from fourcount.face.as_printed import AsPrinted
 from fourcount.face.cautions_strip import CautionsStrip
+from fourcount.face.checking import Checking
 from fourcount.face.columns import Page, PageScroll
 from fourcount.face.commands import Commands
-from fourcount.face.fields import TextField
+from fourcount.face.cursor_keeper import CursorKeeper
 from fourcount.face.for_one_patient import ForOnePatient
 from fourcount.face.header import Banner, Hairline, Header
 from fourcount.face.later import Later
 from fourcount.face.look import APPEARANCES, Look
+from fourcount.face.pasting import Pasting
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
 from fourcount.record import editing
-from fourcount.record.outcome import CELLS, Outcome
+from fourcount.record.outcome import FORMS, Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
 from fourcount.wording.standing import STANDING
@@ -58,6 +60,8 @@ class MainWindow(QMainWindow):
         self._painted = False
         self._shown: Record | None = None
         self.commands = Commands(session, look, self)
+        self.pasting = Pasting(session, self)
+        self.checking = Checking(session, later, self)
         self.actions_by_key = commands_table.make_actions(self)
         self.header = Header(look)
         self.banner = Banner(look)
@@ -66,17 +70,12 @@ class MainWindow(QMainWindow):
         self.patient = ForOnePatient(look, self.actions_by_key)
         self.commands.picture = self.patient.picture
         self.cautions = CautionsStrip(look, STANDING)
+        self.cursor_keeper = CursorKeeper(self)
         self._build()
         self._connect_all()
         self._show_state(session.record, None)
-        grid = self.printed.grid
-        self._fields: tuple[TextField, ...] = (
-            self.header.title, self.header.source, self.printed.name, self.printed.event_words, self.printed.span,
-            *grid.headings.values(), *grid.labels.values(), *grid.cells.values(), self.patient.baseline,
-            self.patient.source,
-        )  # fmt: skip
         self._set_tab_order()
-        self.printed.grid.cells[CELLS[0]].setFocus()
+        self.printed.first_field.setFocus()
 
     def _build(self) -> None:
         self.setWindowTitle(labels.WINDOW_TITLE)
@@ -134,19 +133,28 @@ class MainWindow(QMainWindow):
             view.edited.connect(self.session.edit_text)
             view.edited.connect(self._on_edited)
             view.left.connect(self.session.end_run)
-        do = self.commands
+        do, go = self.commands, self.cursor_keeper
         self.printed.design.chosen.connect(do.choose_design)
         self.printed.welcome.chosen.connect(do.choose_welcome)
         self.printed.form.chosen.connect(do.choose_form)
+        self.printed.take_table = self.pasting.take_table
+        self.printed.rare.chosen.connect(do.choose)
+        self.printed.rare.row_wanted.connect(go.add_row)
+        self.printed.rare.paste_taken.connect(self.pasting.take)
+        self.printed.rare.paste_left.connect(go.paste_over)
+        self.pasting.offered.connect(go.paste_offered)
+        self.pasting.taken.connect(go.paste_over)
+        self.pasting.noticed.connect(self.header.tell)
+        self.checking.changed.connect(self._show_check)
         self.printed.layout_choice.chosen.connect(do.choose_layout)
         self.printed.example_wanted.connect(do.open_example)
         self.says.family_chosen.connect(do.choose_family)
         self.says.level_chosen.connect(do.choose_level)
         self.patient.effect_chosen.connect(do.choose_effect)
-        do.cell_wanted.connect(self._on_first_cell)
+        do.cell_wanted.connect(go.to_first_cell)
         do.noticed.connect(self.header.tell)
         self.session.changed.connect(self._show_state)
-        self.session.focus_wanted.connect(self._on_focus_wanted)
+        self.session.focus_wanted.connect(go.focus_wanted)
         self._later.arrived.connect(self._on_figures_arrived)
         self._later.loaded.connect(self._on_libraries_loaded)
         self.look.changed.connect(self._on_look_changed)
@@ -159,14 +167,19 @@ class MainWindow(QMainWindow):
             "new": do.new_table, "example": do.open_example, "quit": self.close, "undo": self.session.undo,
             "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
             "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
-            "form": do.change_form, "level": do.ask_level, "layout": do.change_layout, "clear": do.clear_counts,
-            "first-cell": self._on_first_cell, "baseline": self._on_baseline, "bigger": self._on_bigger,
+            "paste": self.pasting.paste, "form": go.to_form, "add-row": go.add_row,
+            "remove-row": go.remove_row, "adopt": self._on_adopt, "paper": go.to_paper, "level": do.ask_level,
+            "layout": do.change_layout, "clear": do.clear_counts,
+            "first-cell": go.to_first_cell, "baseline": go.to_baseline, "bigger": self._on_bigger,
             "smaller": self._on_smaller, "actual": self._on_actual, "bars": self._on_bars,
             "more": self._on_more, "methods": self._on_methods,
             "keys": self._on_keys, "about": self._on_about,
         }  # fmt: skip
         for key, handler in handlers.items():
             self.actions_by_key[key].triggered.connect(handler)
+        for form in FORMS:
+            self.actions_by_key[f"form-{form}"].setData(form)
+        self.menus["forms"].triggered.connect(go.form_chosen)
 
     # What is shown
 
@@ -178,6 +191,8 @@ class MainWindow(QMainWindow):
             self.header.tell("")
         self._shown = record
         self.printed.show_state(outcome, findings)
+        self.checking.follow()
+        self._show_check()
         self.says.show_state(record, outcome, findings)
         self.patient.show_state(record, outcome, findings)
         self.cautions.show_state(findings)
@@ -186,6 +201,12 @@ class MainWindow(QMainWindow):
         title = record.title_text.strip()
         self.setWindowTitle(labels.TITLED_WINDOW.format(title=title) if title else labels.WINDOW_TITLE)
         self._ask_for_the_rest()
+
+    def _show_check(self) -> None:
+        """Show what the paper says, and what the last check found."""
+        found, choices = self.checking.found, self.session.record.choices
+        self.printed.show_check(self.session.outcome, found, choices)
+        self.actions_by_key["adopt"].setEnabled(bool(found and found.adopt))
 
     def _ask_for_the_rest(self) -> None:
         if self.session.findings is not None:
@@ -208,7 +229,7 @@ class MainWindow(QMainWindow):
             QTimer.singleShot(0, self.first_painted.emit)
 
     def keyPressEvent(self, event: QKeyEvent) -> None:
-        if event.key() == Qt.Key.Key_Escape and self.says.close_working():
+        if event.key() == Qt.Key.Key_Escape and (self.printed.rare.leave_paste() or self.says.close_working()):
             return
         super().keyPressEvent(event)
 
@@ -257,22 +278,8 @@ class MainWindow(QMainWindow):
         if choices == self.session.record.choices:
             self.session.take_findings(outcome, findings)
 
-    def _on_focus_wanted(self, key: str) -> None:
-        for field in self._fields:
-            if field.field == key:
-                field.setFocus(Qt.FocusReason.OtherFocusReason)
-
-    def _on_first_cell(self) -> None:
-        cell = self.printed.grid.cells[CELLS[0]]
-        cell.setFocus(Qt.FocusReason.ShortcutFocusReason)
-        cell.selectAll()
-        self.page_scroll.ensureWidgetVisible(cell)
-
-    def _on_baseline(self) -> None:
-        field = self.patient.baseline
-        field.setFocus(Qt.FocusReason.ShortcutFocusReason)
-        field.selectAll()
-        self.page_scroll.ensureWidgetVisible(field)
+    def _on_adopt(self) -> None:
+        self.commands.adopt(self.checking.found)
 
     def _on_bigger(self) -> None:
         self.look.step_zoom(1)
@@ -309,16 +316,10 @@ class MainWindow(QMainWindow):
         for menu in self.menus.values():
             menu.setFont(self.look.font("body"))
         self.update()
-        QTimer.singleShot(0, self._show_focus)
+        QTimer.singleShot(0, self.cursor_keeper.show_focus)
 
     def _on_edited(self, _field: str, _text: str) -> None:
-        self._show_focus()
+        self.cursor_keeper.show_focus()
 
     def _on_focus_changed(self, _before: QWidget | None, _now: QWidget | None) -> None:
-        self._show_focus()
-
-    def _show_focus(self) -> None:
-        """Bring what has the focus into view."""
-        focus = self.focusWidget()
-        if focus and self.page.isAncestorOf(focus):
-            self.page_scroll.ensureWidgetVisible(focus)
+        self.cursor_keeper.show_focus()

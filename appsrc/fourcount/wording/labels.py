@@ -22,6 +22,14 @@ FIELDS = {
     "level": "Confidence level",
     "label": "Name of the {group}",
     "heading": "Short name of the {column} outcome",
+    "unit_text": "Unit of person-time",
+    "limits_level_text": "Level of the limits",
+    "paper": "Paper says",
+    "paper_measure": "What the paper calls it",
+    "paper_text": "What the paper prints",
+    "adjusted_for_text": "Adjusted for",
+    "rows_as": "Rows as",
+    "stratum": "Name of row {number}",
 }
 """Names of the fields, on screen and for a screen reader."""
 
@@ -37,6 +45,14 @@ HINTS = {
     "right_heading": "no event",
     "left_heading_cases": "cases",
     "right_heading_cases": "controls",
+    "left_heading_exposed": "exposed",
+    "right_heading_exposed": "not exposed",
+    "unit_text": "“person-years”",
+    "limits_level_text": "95%",
+    "paper_text": "“0.54 (0.37 to 0.78)”",
+    "adjusted_for_text": "nothing, or “age, sex”",
+    "stratum": "“under 65”",
+    "count_of_percent": "= {count}",
 }
 """What a field says while it is empty."""
 
@@ -45,12 +61,36 @@ DESIGNS = {
     "cohort": "cohort study",
     "survey": "cross-sectional survey",
     "case-control": "case-control study",
+    "matched": "matched case-control study",
+    "paired": "crossover or paired study",
+    "before-after": "before-after study",
 }
 
 WELCOME = {"unwelcome": "unwelcome", "welcome": "welcome"}
 
-FORMS = {"events-and-others": "38 · 374", "events-of-total": "38 of 412"}
-"""How a paper prints the counts of a group, by a specimen."""
+FORMS = {
+    "events-and-others": "38 · 374",
+    "events-of-total": "38 of 412",
+    "percent-of-total": "9.2% of 412",
+    "effect-only": "OR 0.49 (0.32–0.75)",
+    "pairs": "pairs",
+    "person-time": "38 in 4,120 person-years",
+    "risk-at-time": "9% (6–12) at 2 years",
+    "strata": "strata",
+}
+"""How a paper prints its result, by a specimen."""
+
+FORM_NOTES = {
+    "events-and-others": "events and others",
+    "events-of-total": "events and all",
+    "percent-of-total": "percentage and all",
+    "effect-only": "no counts",
+    "pairs": "matched or twice the same people",
+    "person-time": "a rate",
+    "risk-at-time": "follow-up varied",
+    "strata": "several tables",
+}
+"""What a specimen stands for, in a word or two beside it."""
 
 LAYOUTS = {"down": "groups down", "across": "groups across"}
 
@@ -61,15 +101,22 @@ LEVELS = {0.8: "80%", 0.9: "90%", 0.95: "95%", 0.98: "98%", 0.99: "99%", 0.999: 
 INTERVALS_PREFIX = "Intervals: "
 LEVEL_PREFIX = "Level: "
 
-ROLES = {"index": "index", "reference": "reference", "counted": "counted"}
+ROLES = {"index": "index", "reference": "reference", "counted": "counted", "others": "others counted"}
 TOTAL = "total"
+ALL = "all"
 
 GROUP_NAMES = {"first": "first group", "second": "second group"}
 CELL_NAMES = {
     "events-and-others": "{group}, {outcome}",
     "left": "{group}, {outcome}",
     "right": "{group}, all people",
+    "percent": "{group}, percentage with {outcome}",
+    "events": "{group}, events: {outcome}",
+    "time": "{group}, person-time",
+    "risk": "{group}, risk of {outcome}",
+    "limits": "{group}, limits of the risk",
 }
+LIMITS = "limits"
 
 INTERVAL_HEAD = "{level} interval"
 WINDOW_TITLE = "Fourcount"
@@ -94,7 +141,12 @@ COMMANDS = {
     "copy-picture": "Copy the &picture",
     "swap": "&Swap groups",
     "count-other": "&Count the other outcome",
-    "form": "Print &form: 38 · 374 or 38 of 412",
+    "paste": "Paste a ta&ble or a sentence",
+    "form": "Choose how it is &printed",
+    "add-row": "&Add a row to the strata",
+    "remove-row": "Remove the row fro&m the strata",
+    "adopt": "Adopt the paper’s &method and level",
+    "paper": "Go to what the &paper says",
     "layout": "Groups &down or across",
     "clear": "C&lear the counts",
     "first-cell": "&Go to the first count",
@@ -111,12 +163,23 @@ COMMANDS = {
 }
 """What each command is called in the menus; ``&`` stands before its access key."""
 
+FORM_MENU = "Printed &as"
+FORM_COMMAND = "&{number}  {specimen}, {note}"
+COMMANDS |= {
+    f"form-{form}": FORM_COMMAND.format(number=number, specimen=FORMS[form], note=note)
+    for number, (form, note) in enumerate(FORM_NOTES.items(), start=1)
+}
+
 APPEARANCES = {"system": "Light or dark: as the s&ystem", "light": "L&ight", "dark": "&Dark"}
+
+LINK_NAMES = {"count-other": "Count the other outcome"}
+"""What a link is called in full, where its words are short."""
 
 LINK_WORDS = {
     "swap": "Swap groups",
-    "count-other": "Count the other outcome",
+    "count-other": "Count the other",
     "clear": "Clear",
+    "paste": "Paste…",
     "copy-text": "Copy as text",
     "copy-table": "Copy as a table",
     "copy-picture": "Copy the picture",
@@ -127,6 +190,7 @@ COPIED = {
     "copy-table": "Copied as a table.",
     "copy-picture": "Copied as a picture.",
 }
+NOTHING_PASTED = "The table holds what was pasted already."
 NOTHING_TO_COPY = "Nothing copied: the table is not whole."
 RISK_OF_OTHER_GROUP = "The starting risk now stands for the other group."
 CHOICES_AS_LAST = "Intervals as last used: {family}, {level}."

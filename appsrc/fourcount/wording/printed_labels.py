@@ -39,7 +39,7 @@ ADOPT = "Adopt {family}, {level}"
 OPTIONAL = {
     "counting": "People or events",
     "follow-up": "Follow-up varied",
-    "losses": "Randomised and lost",
+    "losses": "Losses",
     "clusters": "Clusters",
     "adjusted": "Adjusted effect",
     "where": "Where it stands",
@@ -84,17 +84,13 @@ OPTIONAL_HINTS = {
 }
 
 PASTE_HEAD = "Understood from what was pasted"
-PASTE_FIGURES = "Printed: {text}"
-PASTE_GROUP = "{label}: {words}"
 PASTE_LINKS = {"take": "Take it", "turn": "Other way round", "leave": "Leave it"}
-PASTE_PLACE = "line {number}"
 PASTED = "Filled from the paste: {parts}. Ctrl+Z takes it back."
 PASTED_PARTS = {
     "table": "the table",
     "labels": "names of the groups",
     "headings": "names of the outcomes",
     "words": "the event",
-    "unit": "the unit",
     "span": "the time span",
     "figures": "what the paper prints",
 }

@@ -1,0 +1,136 @@
+"""Does it add up? What the paper prints, and what the check finds, sentence by sentence."""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING, NamedTuple
+
+from PySide6.QtCore import Qt, Signal
+from PySide6.QtGui import QAction
+from PySide6.QtWidgets import QGridLayout, QLabel, QVBoxLayout
+
+from fourcount.face.fields import FieldsView
+from fourcount.face.header import Hairline
+from fourcount.face.links import Link
+from fourcount.face.look import Look
+from fourcount.face.printed.paper_says import PaperSays
+from fourcount.face.text import Words
+from fourcount.record.outcome import EffectOnly, Outcome
+from fourcount.record.paper import Choices
+from fourcount.wording import labels, numbers
+from fourcount.wording.printed_labels import ADOPT, CHECK_HEAD, CHECK_MARKS
+
+if TYPE_CHECKING:
+    from fourcount.appraisal.findings import CheckFindings
+
+SIGNS = {True: "=", False: "?"}
+
+
+class Row(NamedTuple):
+    """A sentence with its sign before it."""
+
+    sign: QLabel
+    words: Words
+
+
+class CheckView(FieldsView):
+    """The heading, the line of what the paper says, the findings, and a command that adopts the paper's method.
+
+    **Signals**
+        measure_chosen: what the paper calls its result was chosen. Carries the key.
+    """
+
+    measure_chosen = Signal(object)
+
+    def __init__(self, look: Look, adopt: QAction) -> None:
+        super().__init__()
+        self._look = look
+        self._check: CheckFindings | None = None
+        self.paper = PaperSays(look)
+        self.head = Words(look, "head", "muted", CHECK_HEAD, wraps=False)
+        self.adopt = Link(look, labels.COMMANDS["adopt"].replace("&", ""), adopt)
+        self.rows: list[Row] = []
+        self._column = QVBoxLayout(self)
+        self._column.setContentsMargins(0, 0, 0, 0)
+        self._findings = QGridLayout()
+        self._findings.setContentsMargins(0, 0, 0, 0)
+        self._findings.setColumnStretch(1, 1)
+        self._column.addWidget(Hairline(look))
+        self._column.addWidget(self.head)
+        self._column.addWidget(self.paper)
+        self._column.addLayout(self._findings)
+        self._column.addWidget(self.adopt)
+        self.setAccessibleName(CHECK_HEAD)
+        self._pass_on(self.paper)
+        self.paper.measure_chosen.connect(self.measure_chosen)
+        look.changed.connect(self._on_look_changed)
+        self._on_look_changed()
+
+    def show_state(self, outcome: Outcome, check: CheckFindings | None, choices: Choices, field_width: int) -> None:
+        """Show what was typed, and what the last check found; a paper that says nothing has no findings."""
+        alone = isinstance(outcome.table, EffectOnly)
+        self.paper.align(field_width)
+        self.paper.show_state(outcome, alone)
+        if check is not self._check:
+            self._check = check
+            self._show_findings(check)
+        self._show_adopt(check, choices)
+
+    def take_back(self) -> None:
+        """Hold the line of what the paper says again, after it stood in the table's place."""
+        self._column.insertWidget(2, self.paper)
+
+    @property
+    def sentences(self) -> list[str]:
+        """The findings on screen, in order."""
+        return [row.words.text() for row in self.rows if not row.words.isHidden()]
+
+    def _show_findings(self, check: CheckFindings | None) -> None:
+        told: list[tuple[bool, str]] = []
+        marks: list[str] = []
+        if check is not None:
+            from fourcount.wording.check import check_lines
+            from fourcount.wording.gaps import mark_text
+
+            told = [(line.agrees, line.text) for line in check_lines(check)]
+            marks = [mark_text(mark) for mark in check.marks]
+        self.paper.text.show_mark(" ".join(marks))
+        told += [(False, text) for text in marks]
+        for place in range(max(len(told), len(self.rows))):
+            self._show_row(place, *told[place] if place < len(told) else (False, ""))
+
+    def _show_row(self, place: int, agrees: bool, text: str) -> None:
+        if place == len(self.rows):
+            row = Row(QLabel(), Words(self._look, "body", selectable=True))
+            row.sign.setTextFormat(Qt.TextFormat.PlainText)
+            row.sign.setAlignment(Qt.AlignmentFlag.AlignTop)
+            self._findings.addWidget(row.sign, place, 0)
+            self._findings.addWidget(row.words, place, 1)
+            self.rows.append(row)
+        row = self.rows[place]
+        row.sign.setVisible(bool(text))
+        row.sign.setText(SIGNS[agrees] if text else "")
+        row.sign.setAccessibleName(CHECK_MARKS[agrees])
+        row.words.setAccessibleName(f"{CHECK_MARKS[agrees]}: {text}" if text else "")
+        row.words.show_words(text)
+        self._dress(row, agrees)
+
+    def _show_adopt(self, check: CheckFindings | None, choices: Choices) -> None:
+        adopt = check.adopt if check else None
+        wanted = adopt is not None and adopt != (choices.family, choices.level)
+        self.adopt.setVisible(wanted)
+        if adopt and wanted:
+            family, level = adopt
+            self.adopt.show_words(ADOPT.format(family=labels.FAMILIES[family], level=numbers.level(level)))
+
+    def _dress(self, row: Row, agrees: bool) -> None:
+        row.sign.setFont(self._look.font("strong"))
+        row.sign.setPalette(self._look.text_palette("accent" if agrees else "caution"))
+        row.sign.setMinimumWidth(self._look.px(16))
+
+    def _on_look_changed(self) -> None:
+        px = self._look.px
+        self._column.setSpacing(px(12))
+        self._findings.setHorizontalSpacing(0)
+        self._findings.setVerticalSpacing(px(6))
+        for row in self.rows:
+            self._dress(row, row.sign.text() == SIGNS[True])

@@ -1,0 +1,175 @@
+"""The rows of fields that few papers need: which fields each holds, and whether it holds something."""
+
+from __future__ import annotations
+
+from typing import NamedTuple
+
+from PySide6.QtCore import Qt, Signal
+from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QWidget
+
+from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.look import Look
+from fourcount.face.printed.quiet_link import QuietLink
+from fourcount.face.text import Words
+from fourcount.record.outcome import EffectOnly, Outcome
+from fourcount.wording import labels
+from fourcount.wording.printed_labels import (
+    CLOSE_FIELDS,
+    COUNTING,
+    FOLLOW_UP,
+    OPTIONAL,
+    OPTIONAL_FIELDS,
+    OPTIONAL_HINTS,
+    PAPER_MEASURES,
+    WHERE,
+)
+
+LOSSES = ("randomised_text", "lost_text", "loss_ratio_text")
+
+
+class Kind(NamedTuple):
+    """A row's text fields, and its choice: the outcome's field and what it offers."""
+
+    texts: tuple[str, ...] = ()
+    choice: str = ""
+    choices: tuple[tuple[object, str], ...] = ()
+
+
+ROWS: dict[str, Kind] = {
+    "counting": Kind(choice="counting", choices=tuple(COUNTING.items())),
+    "follow-up": Kind(choice="follow_up_varied", choices=tuple(FOLLOW_UP.items())),
+    "losses": Kind(texts=tuple(f"{group}_{name}" for group in labels.GROUP_NAMES for name in LOSSES)),
+    "clusters": Kind(texts=("icc_text", "cluster_size_text")),
+    "adjusted": Kind(
+        texts=("adjusted_text", "adjusted_for_text"), choice="adjusted_measure", choices=tuple(PAPER_MEASURES.items())
+    ),
+    "where": Kind(choice="where", choices=tuple(WHERE.items())),
+}
+
+
+def holds(key: str, outcome: Outcome) -> bool:
+    """Whether a row's fields hold anything but what an empty outcome has."""
+    if key == "adjusted" and isinstance(outcome.table, EffectOnly):
+        return bool(outcome.adjusted_text.strip())  # what the one effect is adjusted for stands beside it
+    if key == "adjusted":
+        return bool(outcome.adjusted_text.strip() or outcome.adjusted_for_text.strip())
+    kind, empty = ROWS[key], Outcome()
+    if any(getattr(outcome, text).strip() for text in kind.texts):
+        return True
+    return bool(kind.choice) and getattr(outcome, kind.choice) != getattr(empty, kind.choice)
+
+
+class OptionalRow(FieldsView):
+    """Name, fields, and a way to close it while it is empty.
+
+    **Signals**
+        chosen: a choice was made. Carries the outcome's field and the choice.
+        closed: the row is to be closed. Carries its key.
+    """
+
+    chosen = Signal(str, object)
+    closed = Signal(str)
+
+    def __init__(self, look: Look, key: str) -> None:
+        super().__init__()
+        self._look = look
+        self._key = key
+        kind = ROWS[key]
+        self.choice: ChoiceField | None = None
+        if kind.choice:
+            self.choice = ChoiceField(
+                look, OPTIONAL_FIELDS[kind.choice if key == "adjusted" else key], kind.choices,
+                snug=key == "adjusted",
+            )  # fmt: skip
+            self.choice.chosen.connect(self._on_chosen)
+        self._texts = {text: self._field(text) for text in kind.texts}
+        self._group_names = {group: Words(look, "small", "muted", name) for group, name in labels.GROUP_NAMES.items()}
+        self.close_link = QuietLink(look, key, "×", CLOSE_FIELDS.format(name=OPTIONAL[key]))
+        self.close_link.opened.connect(self.closed)
+        self._layout = QGridLayout(self)
+        self._layout.setContentsMargins(0, 0, 0, 0)
+        self._layout.setColumnStretch(1, 1)
+        self._build(key)
+        self._pass_on(*self.fields)
+        look.changed.connect(self._on_look_changed)
+        self._on_look_changed()
+
+    @property
+    def fields(self) -> tuple[TextField, ...]:
+        return tuple(self._texts.values())
+
+    @property
+    def stops(self) -> tuple[QWidget, ...]:
+        """What Tab stops at, in order."""
+        return (*((self.choice,) if self.choice else ()), *self.fields, self.close_link)
+
+    def show_state(self, outcome: Outcome) -> None:
+        """Show what was typed and chosen."""
+        kind = ROWS[self._key]
+        if self.choice:
+            self.choice.show_choice(getattr(outcome, kind.choice))
+        for name, field in self._texts.items():
+            field.show_text(getattr(outcome, name))
+        for group, words in self._group_names.items():
+            words.setText(getattr(outcome, f"{group}_label_text").strip() or labels.GROUP_NAMES[group])
+            if self._key != "losses":
+                words.hide()
+        full = holds(self._key, outcome)
+        self.close_link.setVisible(not full)
+
+    def _build(self, key: str) -> None:
+        name = Words(self._look, "body", "muted", OPTIONAL_FIELDS[key], wraps=False)
+        self._layout.addWidget(self.close_link, 0, 2, Qt.AlignmentFlag.AlignTop)
+        if key == "losses":
+            self._build_losses(name)
+            return
+        self._layout.addWidget(name, 0, 0)
+        line = QHBoxLayout()
+        line.setSpacing(12)
+        if self.choice:
+            line.addWidget(self.choice)
+        fields = list(self.fields)
+        last = fields.pop() if key == "adjusted" else None
+        for field in fields:
+            line.addWidget(field, 1)
+        self._layout.addLayout(line, 0, 1)
+        if last:
+            self._layout.addWidget(last, 1, 1)
+
+    def _build_losses(self, name: Words) -> None:
+        """A line for each group; the heads say what each field is."""
+        table = QGridLayout()
+        table.setHorizontalSpacing(8)
+        table.setVerticalSpacing(2)
+        self._layout.addLayout(table, 0, 0, 1, 2)
+        table.addWidget(name, 0, 0)
+        for column, text in enumerate(LOSSES, start=1):
+            head = Words(self._look, "small", "muted", OPTIONAL_FIELDS[text])
+            head.setAlignment(Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignBottom)
+            table.addWidget(head, 0, column)
+            table.setColumnStretch(column, 2)
+            for row, group in enumerate(labels.GROUP_NAMES, start=1):
+                field = self._texts[f"{group}_{text}"]
+                field.setAlignment(Qt.AlignmentFlag.AlignRight)
+                table.addWidget(field, row, column)
+        table.setColumnStretch(0, 3)
+        for row, words in enumerate(self._group_names.values(), start=1):
+            table.addWidget(words, row, 0)
+
+    def _field(self, text: str) -> TextField:
+        for group, name in labels.GROUP_NAMES.items():
+            if text.startswith(f"{group}_"):
+                what = text.removeprefix(f"{group}_")
+                return TextField(self._look, text, f"{name}, {OPTIONAL_FIELDS[what]}", OPTIONAL_HINTS[what])
+        return TextField(self._look, text, OPTIONAL_FIELDS[text], OPTIONAL_HINTS[text])
+
+    def align(self, width: int) -> None:
+        """Give the name the width that names have in the rows above."""
+        self._layout.setColumnMinimumWidth(0, width)
+
+    def _on_chosen(self, choice: object) -> None:
+        self.chosen.emit(ROWS[self._key].choice, choice)
+
+    def _on_look_changed(self) -> None:
+        self._layout.setHorizontalSpacing(self._look.px(12))
+        self._layout.setVerticalSpacing(self._look.px(2))

@@ -1,0 +1,65 @@
+"""What the paper itself prints as its result: how it calls it, and the figures as one line of text."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import Signal
+from PySide6.QtWidgets import QGridLayout, QHBoxLayout
+
+from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.look import Look
+from fourcount.face.text import Words
+from fourcount.record.outcome import Outcome
+from fourcount.wording import labels
+from fourcount.wording.printed_labels import PAPER_MEASURES
+
+
+class PaperSays(FieldsView):
+    """One line, and for a result without counts a second one: what it is adjusted for.
+
+    **Signals**
+        measure_chosen: what the paper calls its result was chosen. Carries the key.
+    """
+
+    measure_chosen = Signal(object)
+
+    def __init__(self, look: Look) -> None:
+        super().__init__()
+        self._look = look
+        self.name = Words(look, "body", "muted", labels.FIELDS["paper"], wraps=False)
+        self.measure = ChoiceField(look, labels.FIELDS["paper_measure"], tuple(PAPER_MEASURES.items()), snug=True)
+        self.text = TextField(look, "paper_text", labels.FIELDS["paper_text"], labels.HINTS["paper_text"])
+        self.adjusted_name = Words(look, "body", "muted", labels.FIELDS["adjusted_for_text"], wraps=False)
+        self.adjusted = TextField(
+            look, "adjusted_for_text", labels.FIELDS["adjusted_for_text"], labels.HINTS["adjusted_for_text"]
+        )
+        self._rows = QGridLayout(self)
+        self._rows.setContentsMargins(0, 0, 0, 0)
+        self._rows.setColumnStretch(1, 1)
+        self._line = QHBoxLayout()
+        self._line.addWidget(self.measure)
+        self._line.addWidget(self.text, 1)
+        self._rows.addWidget(self.name, 0, 0)
+        self._rows.addLayout(self._line, 0, 1)
+        self._rows.addWidget(self.adjusted_name, 1, 0)
+        self._rows.addWidget(self.adjusted, 1, 1)
+        self._pass_on(self.text, self.adjusted)
+        self.measure.chosen.connect(self.measure_chosen)
+        look.changed.connect(self._on_look_changed)
+        self._on_look_changed()
+
+    def show_state(self, outcome: Outcome, alone: bool) -> None:
+        """Show what was typed; ``alone`` where no counts stand beside it."""
+        self.measure.show_choice(outcome.paper_measure)
+        self.text.show_text(outcome.paper_text)
+        self.adjusted.show_text(outcome.adjusted_for_text)
+        for widget in (self.adjusted_name, self.adjusted):
+            widget.setVisible(alone)
+
+    def align(self, width: int) -> None:
+        """Give the names the width that names have in the rows above."""
+        self._rows.setColumnMinimumWidth(0, width)
+
+    def _on_look_changed(self) -> None:
+        self._rows.setHorizontalSpacing(self._look.px(12))
+        self._rows.setVerticalSpacing(self._look.px(4))
+        self._line.setSpacing(self._look.px(12))

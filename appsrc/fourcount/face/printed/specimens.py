@@ -1,0 +1,43 @@
+"""How the list of forms of print is painted: the specimen, and what it stands for in muted words at the right."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import QModelIndex, QPersistentModelIndex, QSize, Qt
+from PySide6.QtGui import QFontMetrics, QPainter
+from PySide6.QtWidgets import QComboBox, QStyle, QStyledItemDelegate, QStyleOptionViewItem
+
+from fourcount.face.look import Look
+
+Index = QModelIndex | QPersistentModelIndex
+
+
+class SpecimenDelegate(QStyledItemDelegate):
+    """Paints a specimen and its note on one line."""
+
+    def __init__(self, look: Look, box: QComboBox) -> None:
+        super().__init__(box)
+        self._look = look
+
+    def sizeHint(self, _option: QStyleOptionViewItem, index: Index) -> QSize:
+        return QSize(self._width(index.data(), index.data(Qt.ItemDataRole.StatusTipRole)), self._look.px(28))
+
+    def paint(self, painter: QPainter, option: QStyleOptionViewItem, index: Index) -> None:
+        look, pad = self._look, self._look.px(10)
+        area = option.rect.adjusted(pad, 0, -pad, 0)
+        chosen = bool(option.state & QStyle.StateFlag.State_Selected)
+        middle = Qt.AlignmentFlag.AlignVCenter
+        painter.save()
+        painter.fillRect(option.rect, look.colour("tint" if chosen else "page"))
+        if chosen:
+            painter.fillRect(option.rect.adjusted(0, 0, 3 - option.rect.width(), 0), look.colour("accent"))
+        painter.setFont(look.font("body"))
+        painter.setPen(look.colour("ink"))
+        painter.drawText(area, Qt.AlignmentFlag.AlignLeft | middle, index.data())
+        painter.setFont(look.font("small"))
+        painter.setPen(look.colour("muted"))
+        painter.drawText(area, Qt.AlignmentFlag.AlignRight | middle, index.data(Qt.ItemDataRole.StatusTipRole))
+        painter.restore()
+
+    def _width(self, specimen: str, note: str) -> int:
+        body, small = QFontMetrics(self._look.font("body")), QFontMetrics(self._look.font("small"))
+        return body.horizontalAdvance(specimen) + small.horizontalAdvance(note) + self._look.px(48)

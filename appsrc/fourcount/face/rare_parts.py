@@ -1,0 +1,224 @@
+"""The parts of the first column that are not there from the start: each is made when it is first needed.
+
+While nothing is typed, the column is the table and one quiet line; the window paints before any of this is loaded.
+"""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import Signal
+from PySide6.QtGui import QAction
+from PySide6.QtWidgets import QGridLayout, QVBoxLayout, QWidget
+
+from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.look import Look
+from fourcount.record.outcome import EffectOnly, Outcome, Strata
+from fourcount.record.paper import Choices
+
+if TYPE_CHECKING:
+    from fourcount.appraisal.findings import CheckFindings, OutcomeFindings
+    from fourcount.face.printed.check import CheckView
+    from fourcount.face.printed.optional import OptionalFields
+    from fourcount.face.printed.paste_panel import PastePanel
+    from fourcount.face.printed.row_links import RowLinks
+    from fourcount.face.printed.strata_rows import StrataRows
+    from fourcount.record.entry.readings import Pasted
+
+
+class RareParts(FieldsView):
+    """Makes and places them, and speaks for all of them; it is never shown itself.
+
+    **Signals**
+        chosen: a choice was made. Carries the outcome's field and the choice.
+        row_wanted: one more row of strata is wanted.
+        paste_taken: what was pasted is to be taken as shown. Carries it.
+        paste_left: what was pasted is not to be taken.
+    """
+
+    chosen = Signal(str, object)
+    row_wanted = Signal()
+    paste_taken = Signal(object)
+    paste_left = Signal()
+
+    def __init__(
+        self, owner: QWidget, look: Look, actions: dict[str, QAction], column: QVBoxLayout, rows: QGridLayout
+    ) -> None:
+        super().__init__()
+        self.setParent(owner)
+        self.hide()
+        self._look = look
+        self._actions = actions
+        self._column = column
+        self._form_rows = rows
+        self._alone = False
+        self._asked_for = False
+        self.strata: StrataRows | None = None
+        self.row_links: RowLinks | None = None
+        self.rows_as: ChoiceField | None = None
+        self.optional: OptionalFields | None = None
+        self.check: CheckView | None = None
+        self.panel: PastePanel | None = None
+
+    @property
+    def fields_before(self) -> tuple[TextField, ...]:
+        """The fields that stand in the table's place."""
+        return self.strata.fields if self.strata and not self.strata.isHidden() else ()
+
+    @property
+    def fields_after(self) -> tuple[TextField, ...]:
+        """The fields under the table."""
+        optional = self.optional.fields if self.optional else ()
+        return (*optional, *((self.check.paper.text, self.check.paper.adjusted) if self.check else ()))
+
+    def show_state(self, outcome: Outcome, findings: OutcomeFindings | None, width: int) -> None:
+        """Show what the outcome needs of them."""
+        self._show_strata(outcome, findings)
+        blank = outcome == Outcome()
+        if self.panel and self.panel.isVisible() and self.panel.outcome != outcome:
+            self.panel.hide()  # what was understood was compared with another table
+        if self.optional is None and not blank and findings is not None:
+            self.optional = self._make_optional()
+        if self.optional:
+            self.optional.setVisible(not blank)
+            self.optional.show_state(outcome, width)
+
+    def show_check(self, outcome: Outcome, check: CheckFindings | None, choices: Choices, width: int) -> None:
+        """Show what the paper says and whether it adds up, as soon as anything is there to compare."""
+        blank = outcome == Outcome() and not self._asked_for
+        if self.check is None and blank:
+            return
+        view = self.check or self._make_check()
+        view.setVisible(not blank)
+        view.show_state(outcome, check, choices, width)
+        alone = isinstance(outcome.table, EffectOnly)
+        if alone != self._alone:
+            self._alone = alone
+            if alone:
+                self._column.insertWidget(self._place_of_table(), view.paper)
+            else:
+                view.take_back()
+
+    def show_marks(self, reasons: dict[str, str]) -> list[str]:
+        """Mark the fields that have a reason; the fields that can be marked here."""
+        told: list[str] = []
+        if self.strata and not self.strata.isHidden():
+            self.strata.show_marks(reasons)
+            told += [field.field for field in self.strata.fields]
+        if self.optional:
+            self.optional.show_marks(reasons)
+            told += [field.field for field in self.optional.fields]
+        return told
+
+    def open_for(self, field: str) -> None:
+        """Open what holds a field."""
+        if self.optional:
+            self.optional.open_for(field)
+
+    def offer(self, pasted: Pasted, outcome: Outcome) -> None:
+        """Show what a paste was understood as, before it is taken."""
+        if self.panel is None:
+            from fourcount.face.printed.paste_panel import PastePanel
+
+            self.panel = PastePanel(self._look)
+            self.panel.taken.connect(self.paste_taken)
+            self.panel.left.connect(self.paste_left)
+            self._column.insertWidget(self._place_of_table(), self.panel)
+        self.panel.offer(pasted, outcome)
+
+    @property
+    def first_field(self) -> TextField | None:
+        """Where typing begins in a form without the grid."""
+        if self.strata and not self.strata.isHidden():
+            return self.strata.rows[0].cells["first_left_text"]
+        return self.check.paper.text if self.check and self._alone else None
+
+    def paper_field(self, outcome: Outcome, choices: Choices, width: int) -> TextField:
+        """The field of what the paper says; once asked for, it stays."""
+        self._asked_for = True
+        self.show_check(outcome, None, choices, width)
+        return (self.check or self._make_check()).paper.text
+
+    @property
+    def current_row(self) -> int:
+        """The place of the row of strata in which the cursor is or was."""
+        return self.strata.current if self.strata else 0
+
+    def go_to_current_row(self) -> None:
+        """Bring the cursor back into the strata."""
+        if self.strata and not self.strata.isHidden():
+            self.strata.go_to(self.strata.current)
+
+    def go_to_last_row(self) -> None:
+        """Bring the cursor into the newest row."""
+        if self.strata and not self.strata.isHidden():
+            self.strata.go_to(len(self.strata.rows) - 1)
+
+    def leave_paste(self) -> bool:
+        """Put an offered paste away; whether there was one."""
+        if self.panel is None or not self.panel.isVisible():
+            return False
+        self.panel.leave.click()
+        return True
+
+    def _show_strata(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
+        wanted = isinstance(outcome.table, Strata)
+        if wanted and self.strata is None:
+            self._make_strata()
+        if self.strata and self.row_links and self.rows_as:
+            for widget in (self.strata, self.row_links, self.rows_as):
+                widget.setVisible(wanted)
+            self.strata.show_state(outcome, findings)
+            if isinstance(outcome.table, Strata):
+                self.rows_as.show_choice(outcome.table.of_total)
+                self.row_links.show_current(self.strata.current)
+
+    def _make_strata(self) -> None:
+        from fourcount.face.printed.row_links import RowLinks
+        from fourcount.face.printed.strata_rows import StrataRows
+        from fourcount.wording import labels
+        from fourcount.wording.printed_labels import ROWS_AS
+
+        self.strata = StrataRows(self._look)
+        self.row_links = RowLinks(self._look, self._actions["add-row"], self._actions["remove-row"])
+        self.rows_as = ChoiceField(self._look, labels.FIELDS["rows_as"], tuple(ROWS_AS.items()))
+        place = self._place_of_table()
+        self._column.insertWidget(place, self.strata)
+        self._column.insertWidget(place + 1, self.row_links)
+        self._form_rows.addWidget(self.rows_as, 5, 1, 1, 2)
+        self._pass_on(self.strata)
+        self.strata.row_wanted.connect(self.row_wanted)
+        self.strata.row_entered.connect(self.row_links.show_current)
+        self.rows_as.chosen.connect(self._on_rows_as)
+
+    def _make_optional(self) -> OptionalFields:
+        from fourcount.face.printed.optional import OptionalFields
+
+        made = OptionalFields(self._look)
+        self._pass_on(made)
+        made.chosen.connect(self.chosen)
+        self._column.insertWidget(self._column.indexOf(self.check) if self.check else self._place_of_foot(), made)
+        return made
+
+    def _make_check(self) -> CheckView:
+        from fourcount.face.printed.check import CheckView
+
+        self.check = CheckView(self._look, self._actions["adopt"])
+        self._pass_on(self.check)
+        self.check.measure_chosen.connect(self._on_paper_measure)
+        self._column.insertWidget(self._place_of_foot(), self.check)
+        return self.check
+
+    def _place_of_table(self) -> int:
+        """Right under the grid, where whatever stands in its stead goes."""
+        return 3
+
+    def _place_of_foot(self) -> int:
+        """Before the stretch at the column's end."""
+        return self._column.count() - 1
+
+    def _on_rows_as(self, of_total: bool) -> None:
+        self.chosen.emit("of_total", of_total)
+
+    def _on_paper_measure(self, measure: object) -> None:
+        self.chosen.emit("paper_measure", measure)
