@@ -18,13 +18,14 @@ Limits = tuple[float, float]
 class Way:
     """One method of an interval; ``centred`` where its own centre is printed as the estimate too (a half was added).
 
-    ``heavy`` ones need numpy and take longer where counts are large.
+    ``heavy`` ones need numpy and take longer where counts are large; those not ``shown`` are known in print only.
     """
 
     key: str
     interval: Callable[[float], Interval | Gap]
     heavy: bool = False
     centred: bool = False
+    shown: bool = True
 
 
 def same(x: Number) -> Number:

@@ -116,7 +116,7 @@ def _source(
 ) -> Finding:
     fitting = () if figure.adjusted else tuple(test for test in tests if agrees(test.p, p, figure))
     if fitting:
-        every = len(fitting) == len(tests) and figure.p_relation != "="
+        every = len(fitting) == len(tests) > 1
         facts: dict[str, Fact] = {"tests": "" if every else " ".join(test.key for test in fitting), "p": fitting[0].p}
         return Finding(key="p-reproduced", facts=facts, agrees=True)
     facts = {}

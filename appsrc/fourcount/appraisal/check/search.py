@@ -151,9 +151,9 @@ def hit(figure: PrintedFigure, candidate: Candidate, way: Way | None, level: flo
 
 
 def nearest_way(figure: PrintedFigure, candidate: Candidate, ways: Iterable[Way]) -> Way | None:
-    """The method whose limits at the wanted level lie nearest to the printed ones."""
+    """The shown method whose limits at the wanted level lie nearest to the printed ones."""
     level = wanted_level(figure)
-    apart = {way.key: distance(candidate.limits(way, level), figure) for way in ways}
+    apart = {way.key: distance(candidate.limits(way, level), figure) for way in ways if way.shown}
     best = min(apart, key=lambda key: apart[key], default=None)
     return None if best is None else next(way for way in candidate.ways if way.key == best)
 

@@ -101,6 +101,7 @@ def ways(entries: tuple[Method, ...], measure: str, *given: object) -> tuple[Way
             interval=partial(_interval, entry.interval, given),
             heavy=entry.key in HEAVY,
             centred=entry.key in CENTRED,
+            shown=entry not in PRINT_METHODS,
         )
         for entry in entries
         if entry.measure == measure

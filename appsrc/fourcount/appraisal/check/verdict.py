@@ -9,7 +9,7 @@ from fourcount.appraisal.check.digits import transposed
 from fourcount.appraisal.check.misses import Miss, near_miss
 from fourcount.appraisal.check.search import Hit, has_limits, hit, nearest_way, wanted_level
 from fourcount.appraisal.check.symmetry import Triple, mirrored_limit, ordered, slips, symmetric, triple_of
-from fourcount.appraisal.findings.check import Finding, Match
+from fourcount.appraisal.findings.check import Finding
 from fourcount.record.entry.readings import PrintedFigure
 from fourcount.stats.results import Fact
 
@@ -75,7 +75,7 @@ def _from_counts(
 def _whole(figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...]) -> Iterator[Finding]:
     top, *rest = _groups(hits)
     first = top[0]
-    facts = {**_facts(first.match, _methods(top)), **_own(figure, first, candidates)}
+    facts = {**_facts(first, _methods(top)), **_own(figure, first, candidates)}
     if figure.adjusted and first.at_level and first.place == 0:
         yield Finding(key="adjusted-is-crude", facts=facts)
         return
@@ -87,7 +87,7 @@ def _whole(figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candi
     if first.place or not first.at_level:
         whole = [group for group in rest if group[0].rank[0] <= 1]
         for group in whole[:_MOST_OTHERS]:
-            yield Finding(key="also-fits", facts=_facts(group[0].match, _methods(group)))
+            yield Finding(key="also-fits", facts=_facts(group[0], _methods(group)))
 
 
 def _estimate_alone(
@@ -95,20 +95,20 @@ def _estimate_alone(
 ) -> Iterator[Finding]:
     first = hits[0]
     if figure.adjusted:
-        yield Finding(key="adjusted", facts=_facts(first.match, ""), agrees=True)
+        yield Finding(key="adjusted", facts=_facts(first, ""), agrees=True)
         return
     miss = near_miss(figure, first.candidate, heavy=heavy)
     if miss is not None and first.place == 0:
         yield _missed(figure, first.candidate, miss)
         return
-    facts = {**_facts(first.match, first.match.method), **_own(figure, first, candidates)}
+    facts = {**_facts(first, first.match.method), **_own(figure, first, candidates)}
     yield Finding(key=ESTIMATE[first.place], facts=facts)
 
 
 def _nothing_fits(figure: PrintedFigure, candidates: tuple[Candidate, ...], *, heavy: bool) -> Iterator[Finding]:
     nearest = _nearest(figure, candidates)
     if figure.adjusted:
-        yield Finding(key="adjusted", facts=_facts(nearest.match, ""), agrees=True)
+        yield Finding(key="adjusted", facts=_facts(nearest, ""), agrees=True)
         return
     for candidate in candidates:
         if candidate.heavy or not candidate.named or candidate.orientation != "as-read":
@@ -117,21 +117,21 @@ def _nothing_fits(figure: PrintedFigure, candidates: tuple[Candidate, ...], *, h
         if miss is not None:
             yield _missed(figure, candidate, miss)
             return
-    yield Finding(key="nearest", facts=_facts(nearest.match, nearest.match.method))
+    yield Finding(key="nearest", facts=_facts(nearest, nearest.match.method))
 
 
 def _interval_only(figure: PrintedFigure, hits: tuple[Hit, ...]) -> Finding:
     top = next(_groups(hits))
-    match = top[0].match
-    estimate = match.computed[0]
+    estimate = top[0].match.computed[0]
     slip = estimate is not None and figure.estimate is not None and transposed(estimate, figure.estimate)
-    return Finding(key="interval-only", facts={**_facts(match, _methods(top)), "slip": int(slip)})
+    return Finding(key="interval-only", facts={**_facts(top[0], _methods(top)), "slip": int(slip)})
 
 
 def _missed(figure: PrintedFigure, candidate: Candidate, miss: Miss) -> Finding:
     way = miss.ways[0] if miss.ways else None
-    match = hit(figure, candidate, way, wanted_level(figure), "estimate").match
-    facts = _facts(match, " ".join(way.key for way in miss.ways))
+    facts = _facts(
+        hit(figure, candidate, way, wanted_level(figure), "estimate"), " ".join(way.key for way in miss.ways)
+    )
     if miss.kind == "one-limit":
         facts |= {"limit": miss.limit, "slip": int(miss.slip)}
     return Finding(key=miss.kind, facts=facts)
@@ -159,10 +159,12 @@ def _methods(group: tuple[Hit, ...]) -> str:
     return " ".join(dict.fromkeys(one.match.method for one in group))
 
 
-def _facts(match: Match, methods: str) -> Facts:
-    """The match as a sentence needs it; a number that is not there is left out."""
+def _facts(one: Hit, methods: str) -> Facts:
+    """A match as a sentence needs it; a number that is not there is left out."""
+    match = one.match
     facts: Facts = {
         "measure": match.measure,
+        "base": one.candidate.measure,
         "methods": methods,
         "level": match.level,
         "orientation": match.orientation,
