@@ -24,8 +24,6 @@ def n_minus_1(counts: FractionalCounts) -> float | Gap:
     effect, so that it agrees with their intervals. Source: E. S. Pearson 1947; Campbell 2007, Stat Med 26:3661
     (from memory). One person or fewer, as a design effect can leave, is a gap.
     """
-    if 0 < counts.total <= 1:
-        return Gap("too-few-left")
     return _chi_square_p(counts, counts.total - 1)
 
 
@@ -33,6 +31,8 @@ def _chi_square_p(counts: FractionalCounts, weight: float) -> float | Gap:
     gap = without_a_contrast(counts)
     if gap is not None:
         return gap
+    if weight <= 0:
+        return Gap("too-few-left")
     across = counts.index_events * counts.reference_non_events - counts.index_non_events * counts.reference_events
     margins = counts.index_total * counts.reference_total * counts.events * counts.non_events
     return two_sided_p(math.sqrt(weight * across * across / margins))

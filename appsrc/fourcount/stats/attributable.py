@@ -9,6 +9,7 @@ from __future__ import annotations
 import math
 
 from fourcount.stats.estimates import risk_ratio
+from fourcount.stats.log_scale import exponential
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import FractionalCounts, Gap, Interval
 
@@ -78,7 +79,7 @@ def population_fraction_interval(counts: FractionalCounts, level: float) -> Inte
         return Gap("zero-width")
     left = c * counts.total / (counts.reference_total * counts.events)
     half_width = quantile(level) * math.sqrt(variance)
-    return Interval(low=1.0 - left * math.exp(half_width), high=1.0 - left * math.exp(-half_width))
+    return Interval(low=1.0 - left * exponential(half_width), high=1.0 - left * math.exp(-half_width))
 
 
 def levin(prevalence: float, ratio: float) -> float | Gap:

@@ -5,6 +5,7 @@ from __future__ import annotations
 import math
 
 from fourcount.stats.estimates import without_people
+from fourcount.stats.log_scale import limits_around
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import FractionalCounts, Gap, Interval
 from fourcount.stats.score import mirrored, multiplier, target
@@ -37,7 +38,7 @@ def woolf(counts: FractionalCounts, level: float) -> Interval | Gap:
         return gart(counts, level)
     half_width = quantile(level) * math.sqrt(1 / a + 1 / b + 1 / c + 1 / d)
     centre = (a * d) / (b * c)
-    return Interval(low=centre * math.exp(-half_width), high=centre * math.exp(half_width))
+    return limits_around(centre, half_width)
 
 
 def gart(counts: FractionalCounts, level: float) -> Interval | Gap:
@@ -49,7 +50,7 @@ def gart(counts: FractionalCounts, level: float) -> Interval | Gap:
     c, d = 2 * counts.reference_events + 1, 2 * counts.reference_non_events + 1
     half_width = quantile(level) * math.sqrt(2 / a + 2 / b + 2 / c + 2 / d)
     centre = (a * d) / (b * c)
-    return Interval(low=centre * math.exp(-half_width), high=centre * math.exp(half_width), adjusted="half")
+    return limits_around(centre, half_width, adjusted="half")
 
 
 def _score(counts: FractionalCounts, level: float, *, finite: bool) -> Interval | Gap:

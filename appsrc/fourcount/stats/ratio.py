@@ -5,6 +5,7 @@ from __future__ import annotations
 import math
 
 from fourcount.stats.estimates import without_people
+from fourcount.stats.log_scale import limits_around
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import FractionalCounts, Gap, Interval
 from fourcount.stats.score import mirrored, multiplier, target
@@ -39,7 +40,7 @@ def katz(counts: FractionalCounts, level: float) -> Interval | Gap:
         return walter(counts, level)
     n1, n2 = counts.index_total, counts.reference_total
     spread = math.sqrt(counts.index_non_events / (a * n1) + counts.reference_non_events / (c * n2))
-    return _around((a * n2) / (c * n1), quantile(level) * spread)
+    return limits_around((a * n2) / (c * n1), quantile(level) * spread)
 
 
 def walter(counts: FractionalCounts, level: float) -> Interval | Gap:
@@ -55,11 +56,7 @@ def walter(counts: FractionalCounts, level: float) -> Interval | Gap:
     a, c = 2 * counts.index_events + 1, 2 * counts.reference_events + 1
     n1, n2 = 2 * counts.index_total + 1, 2 * counts.reference_total + 1
     spread = math.sqrt(2 * (n1 - a) / (a * n1) + 2 * (n2 - c) / (c * n2))
-    return _around((a * n2) / (c * n1), quantile(level) * spread, adjusted="half")
-
-
-def _around(centre: float, log_half_width: float, adjusted: str | None = None) -> Interval:
-    return Interval(low=centre * math.exp(-log_half_width), high=centre * math.exp(log_half_width), adjusted=adjusted)
+    return limits_around((a * n2) / (c * n1), quantile(level) * spread, adjusted="half")
 
 
 def _score(counts: FractionalCounts, level: float, *, finite: bool) -> Interval | Gap:

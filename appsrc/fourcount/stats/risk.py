@@ -9,6 +9,7 @@ from __future__ import annotations
 import math
 from dataclasses import dataclass
 
+from fourcount.stats.log_scale import exponential
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import Gap, Interval
 
@@ -100,7 +101,9 @@ def logit(events: float, total: float, level: float) -> Interval | Gap:
     if events in (0, total):
         return Gap("one-outcome")
     others = total - events
-    factor = math.exp(quantile(level) * math.sqrt(1 / events + 1 / others))
+    factor = exponential(quantile(level) * math.sqrt(1 / events + 1 / others))
+    if math.isinf(factor):
+        return Interval(low=0.0, high=1.0)
     return Interval(low=events / (events + others * factor), high=events * factor / (events * factor + others))
 
 
