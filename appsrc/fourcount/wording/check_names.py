@@ -1,4 +1,4 @@
-"""What the measures, methods and numbers of a check are called: print's names, and our digits beside the printed ones."""
+"""What measures and methods are called in a check, and our digits beside the printed ones."""
 
 from __future__ import annotations
 
@@ -53,7 +53,7 @@ SYMMETRIC_MEASURES = ("odds_ratio", "risk_difference", "pair_odds_ratio", "pair_
 AND, OR, COMMA = " and ", " or ", ", "
 VOWELS = "aeiou"
 
-_TITLES = {(entry.measure, entry.key): entry.title for entry in PRINT_METHODS}
+_TITLES: dict[tuple[str, str], str] = {(entry.measure, entry.key): entry.title for entry in PRINT_METHODS}
 _TEST_TITLES = {entry.key: entry.title for entry in PRINT_TESTS}
 
 

@@ -10,8 +10,8 @@ from fourcount.wording import numbers
 P_TEXTS = {
     "p-reproduced": "{printed} follows from the counts by {tests} ({ours}).",
     "p-from-limits": "{printed} goes with the printed limits, which give about {implied}.",
-    "p-beside-interval": "Check p: {printed} stands beside {level} limits that {hold} no effect ({no_effect}); they may "
-    "rest on different methods.",
+    "p-beside-interval": "Check p: {printed} stands beside {level} limits that {hold} no effect ({no_effect}); they "
+    "may rest on different methods.",
     "p-differs": "Check p: {printed}, while {others}. Another test or an adjustment may explain it.",
     "p-unchecked": "There is nothing here to hold {printed} against.",
 }
@@ -35,7 +35,7 @@ def p_text(finding: Finding, figure: PrintedFigure) -> str:
         "level": numbers.level(level) if isinstance(level, float) else "the",
         "hold": HOLD.get(int(facts.get("inside", 0)), ""),
         "no_effect": str(facts.get("no_effect", 1)),
-        "others": _others(finding, figure),
+        "others": _others(finding),
     }
     return P_TEXTS[finding.key].format_map(parts)
 
@@ -58,7 +58,7 @@ def _p_alone(value: object) -> str:
     return numbers.p_value(value) if isinstance(value, int | float) else "…"
 
 
-def _others(finding: Finding, figure: PrintedFigure) -> str:
+def _others(finding: Finding) -> str:
     facts, parts = finding.facts, []
     if "nearest" in facts:
         test = names.test_list(str(facts["nearest"]))
