@@ -158,6 +158,8 @@ def rate_limit(x: float, estimate: float) -> str:
 
 def quantity(x: float) -> str:
     """An amount of person-time, or a mean, as it was typed: thousands parted, no trailing zeros."""
+    if isinstance(x, int):
+        return whole(x)
     digits = f"{x:,.6f}".rstrip("0").rstrip(".")
     return _tiny(x) if digits == "0" and x else digits
 

@@ -1,0 +1,125 @@
+"""The working of pooled measures: each stratum's part in the sums, and whether the strata tell the same."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import (
+    Counts,
+    Figure,
+    Gap,
+    Homogeneity,
+    Interval,
+    OutcomeFindings,
+    StrataFindings,
+    StratumFindings,
+)
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.stats.interaction import Interaction, ratio_of_ratios
+from fourcount.stats.methods import HOMOGENEITY_TESTS, STRATA_TESTS, homogeneity_test, test
+from fourcount.stats.results import HomogeneityTest
+from fourcount.wording import limits, numbers
+from fourcount.wording.form import measure_of
+from fourcount.wording.gaps import gap_text
+from fourcount.wording.numbers import plain
+from fourcount.wording.working.parts import (
+    ESTIMATE,
+    SPACE,
+    Row,
+    about,
+    interval_rows,
+    other_methods,
+    p_rows,
+    table_measure,
+    value,
+)
+from fourcount.wording.working.unpaired import unpaired_rows
+
+RATIO_OF_RATIOS = "Ratio of the two strata’s ratios"
+INTERACTION_SOURCE = "Altman and Bland 2003, BMJ 326:219: from each one’s interval, on the log scale"
+TWO = 2
+
+
+def strata_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
+    """A pooled measure's rows; a crude one's are those of the four counts thrown together."""
+    strata, found = findings.strata, measure_of(measure, findings)
+    if not measure.startswith("pooled_"):
+        return unpaired_rows(measure, outcome, findings, choices)
+    if not isinstance(strata, StrataFindings) or not isinstance(found, Figure):
+        return ()
+    counts = [stratum.counts for stratum in strata.strata]
+    parts = [(stratum.label, _parts(measure, stratum.counts)) for stratum in strata.strata]
+    rows = [*parts, (ESTIMATE, _sums(measure, counts))]
+    unit = "per 100" if measure == "pooled_risk_difference" else ""
+    rows += interval_rows(measure, found, choices.level, "strata", unit=unit)
+    rows += _interaction(measure, strata.strata, choices)
+    return (*rows, *other_methods(measure, found, table_measure(measure), (counts,), choices.level))
+
+
+def strata_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
+    """Tests of no association within the strata, then those of one odds ratio for all."""
+    strata = findings.strata
+    if not isinstance(strata, StrataFindings):
+        return ()
+    counts = [stratum.counts for stratum in strata.strata]
+    own = [] if isinstance(strata.test, Gap) else about(test(strata.test.method))
+    same = [(entry.title, _homogeneity(entry.test(counts))) for entry in HOMOGENEITY_TESTS]
+    found = strata.homogeneity
+    how = about(homogeneity_test(found.method)) if isinstance(found, Homogeneity) else []
+    return (*p_rows(STRATA_TESTS, (counts,)), *own, SPACE, *same, *how)
+
+
+def pooled_parts(measure: str, t: Counts) -> tuple[float, float]:
+    """A stratum's part of the sum above and of that below the line."""
+    n1, n2, n = t.index_total, t.reference_total, t.total
+    if not n:
+        return 0.0, 0.0
+    a, b, c, d = t.index_events, t.index_non_events, t.reference_events, t.reference_non_events
+    if measure == "pooled_risk_difference":
+        return (a * n2 - c * n1) / n, n1 * n2 / n
+    return (a * n2 / n, c * n1 / n) if measure == "pooled_risk_ratio" else (a * d / n, b * c / n)
+
+
+def _parts(measure: str, t: Counts) -> str:
+    above, below = pooled_parts(measure, t)
+    names = {
+        "pooled_risk_difference": ("(a n2 − c n1)/N", "n1 n2/N"),
+        "pooled_risk_ratio": ("a n2/N", "c n1/N"),
+        "pooled_odds_ratio": ("ad/N", "bc/N"),
+    }[measure]
+    return f"{names[0]} = {plain(above)}, {names[1]} = {plain(below)}"
+
+
+def _sums(measure: str, counts: list[Counts]) -> str:
+    parts = [pooled_parts(measure, t) for t in counts]
+    above, below = sum(part[0] for part in parts), sum(part[1] for part in parts)
+    return f"{plain(above)}/{plain(below)} = {value(above, below)}"
+
+
+def _interaction(measure: str, strata: tuple[StratumFindings, ...], choices: Choices) -> list[Row]:
+    """Of exactly two strata, how far their ratios are apart."""
+    key = measure.removeprefix("pooled_")
+    figures = [stratum.measures.get(key) for stratum in strata]
+    if len(figures) != TWO or measure == "pooled_risk_difference":
+        return []
+    given = [_three(figure) for figure in figures if isinstance(figure, Figure)]
+    if len(given) != TWO or given[0] is None or given[1] is None:
+        return []
+    found = ratio_of_ratios(given[0], given[1], choices.level)
+    if not isinstance(found, Interaction):
+        return [SPACE, (RATIO_OF_RATIOS, gap_text(found))]
+    interval = limits.ratio_interval(Interval(low=found.low, high=found.high), found.ratio)
+    words = f"{numbers.ratio(found.ratio)}{limits.bracketed(interval)}, {numbers.p_phrase(found.p)}"
+    return [SPACE, (RATIO_OF_RATIOS, words), ("Source", INTERACTION_SOURCE)]
+
+
+def _three(figure: Figure) -> tuple[float, float, float] | None:
+    interval, estimate = figure.interval, figure.estimate
+    if isinstance(estimate, Gap) or not isinstance(interval, Interval):
+        return None
+    return estimate, interval.low, interval.high
+
+
+def _homogeneity(found: HomogeneityTest | Gap) -> str:
+    if isinstance(found, Gap):
+        return gap_text(found)
+    return f"{numbers.p_phrase(found.p)}, chi-square {numbers.fixed(found.chi_square, 2)}, degrees {found.degrees}"
