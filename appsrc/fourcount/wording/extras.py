@@ -61,6 +61,7 @@ E_VALUE_NOTE = (
     "An unmeasured confounder would need a risk ratio of this size with both exposure and event, beyond what was "
     "measured, to explain the ratio away. It does not say that there is one, nor how well the study was made."
 )
+E_VALUE_LIMIT = "{value} for the limit nearest no effect"
 CONVERTED = {
     "odds_ratio": "the odds ratio of a common event was turned into a risk ratio first, by its square root",
     "hazard_ratio": "the hazard ratio was turned into a risk ratio of a common event first",
@@ -130,7 +131,7 @@ def _one(key: str, extra: object, case: _Case) -> tuple[MeasureLine, ...]:
     if isinstance(extra, Clusters):
         return (_clusters(extra),)
     if isinstance(extra, EValues):
-        return (_e_value(extra),)
+        return (_e_value(extra, case),)
     if isinstance(extra, Fragility):
         return (_fragility(extra, case),)
     return (_attributable(key, extra, case),) if isinstance(extra, Figure) else ()
@@ -171,11 +172,19 @@ def _clusters(found: Clusters) -> MeasureLine:
     return _line("clusters", NAMES["clusters"], numbers.ratio(found.design_effect), detail=detail, note=CLUSTERS_NOTE)
 
 
-def _e_value(found: EValues) -> MeasureLine:
-    limit = "" if isinstance(found.limit, Gap) else f"of the limit nearest no effect {numbers.ratio(found.limit)}"
+def _e_value(found: EValues, case: _Case) -> MeasureLine:
+    limit = "" if isinstance(found.limit, Gap) else E_VALUE_LIMIT.format(value=numbers.ratio(found.limit))
     converted = CONVERTED.get(found.converted, "")
     note = f"{E_VALUE_NOTE} {converted[:1].upper()}{converted[1:]}." if converted else E_VALUE_NOTE
-    return _line("e_value", NAMES["e_value"], numbers.ratio(found.estimate), interval=limit, note=note)
+    measure = f"{'printed, adjusted ' if found.adjusted else ''}{paper_measure_name(found.measure, case.outcome)}"
+    return _line(
+        "e_value",
+        NAMES["e_value"],
+        numbers.ratio(found.estimate),
+        detail=f"of the {measure}",
+        interval=limit,
+        note=note,
+    )
 
 
 def _fragility(found: Fragility, case: _Case) -> MeasureLine:
