@@ -70,12 +70,24 @@ def _answer(given: list[str]) -> int:
     if wanted.json:
         import json
 
+        from fourcount.publish.answer import checked
         from fourcount.publish.contract import contract
 
-        return _say(json.dumps(contract(outcome, choices, findings), indent=2, allow_nan=False) + "\n")
+        published = {**contract(outcome, choices, findings), **checked(question)}
+        return _say(json.dumps(published, indent=2, allow_nan=False) + "\n")
     from fourcount.publish.listing import listing
 
-    return _say(listing(outcome, findings, choices))
+    return _say(_printed(question) + listing(outcome, findings, choices))
+
+
+def _printed(question: Question) -> str:
+    """What is said of the printed text, if there is any."""
+    if not question.printed_text:
+        return ""
+    from fourcount.appraisal.check import check
+    from fourcount.publish.printed import printed_listing
+
+    return printed_listing(check(question.outcome, question.choices))
 
 
 def _question(wanted: Namespace) -> Question:
@@ -92,6 +104,7 @@ def _question(wanted: Namespace) -> Question:
             intervals=wanted.intervals,
             baseline=wanted.baseline,
             unwelcome=not wanted.welcome,
+            printed=wanted.printed,
         )
     except ValueError as mistake:
         raise MistypedError(str(mistake)) from None
@@ -148,6 +161,7 @@ def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
     parser.add_argument("--level", default="95")
     parser.add_argument("--intervals", default="score")
     parser.add_argument("--baseline")
+    parser.add_argument("--printed")
     for switch in ("--welcome", "--json", "--version"):
         parser.add_argument(switch, action="store_true")
     parser.add_argument("--help", "-h", action="store_true")

@@ -7,14 +7,18 @@ fourcount                              open the window
 fourcount answer A B C D [options]     what the four counts of one table say
 
 A and B are people with and without the event in the index group,
-C and D those in the reference group.
+C and D those in the reference group. With matched, paired or before-after
+they are pairs: both sides, index side only, reference side only, neither.
 
 options of answer:
-  --design DESIGN      trial, cohort, survey or case-control (trial)
+  --design DESIGN      trial, cohort, survey, case-control, matched, paired
+                       or before-after (trial)
   --level PERCENT      confidence level, 80 to 99.9 (95)
   --intervals FAMILY   score, textbook or exact (score)
   --baseline RISK      a patient's starting risk, such as 12% or '12 in 100'
   --welcome            the event is a good one
+  --printed TEXT       what the paper prints, such as 'RR 1.50 (1.12 to 2.01)',
+                       to see whether it follows from the counts
   --json               every figure by every method, for a program to read
 
   --version            the version of the program
@@ -40,5 +44,6 @@ NOT_A_LEVEL = "The level must be a fraction from {low} to {high}, such as 0.95, 
 UNUSABLE_BASELINE = "The baseline cannot be used: {reason}."
 NO_BASELINE = "The baseline is empty: a risk such as 12% is needed, or none."
 NOT_A_BASELINE = "The baseline must be a fraction from 0 to 1, or a text such as 12%, not {given}."
+NOT_A_PRINT = "What is printed must be a text such as 'RR 1.50 (1.12 to 2.01)', not {given}."
 HUGE = "a number as large as that"
 HUGE_BELOW_ZERO = "a number as small as that"
