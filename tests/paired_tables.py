@@ -20,7 +20,7 @@ EXTREME_PAIRS = [cells for cells in itertools.product((0, 1, 3, 10**5, 10**9), r
 TIME = st.floats(0.5, 2000.0) | st.sampled_from([1e-9, 1.0, 1000.0, 1e12])
 RATES = st.tuples(CELL, TIME, CELL, TIME)
 
-EXTREME_RATES = list(itertools.product((0, 1, 3, 10**5, 10**9), (1e-9, 17.5, 1e12), repeat=2))
+EXTREME_RATES = list(itertools.product((0, 1, 3, 10**5, 10**9), (1e-40, 1e-9, 17.5, 1e12), repeat=2))
 """Every combination of no event, single events and very many with tiny and huge person-time."""
 
 

@@ -183,7 +183,7 @@ def two_rates(method: Method, times: tuple[float, float], expected: Sequence[flo
 def one_rate(method: Method, expected: Sequence[float], level: float) -> Coverage:
     """One method of a single rate over a grid of expected events."""
     found = limits(method.interval(events, 1.0, level) for events in range(MOST_EVENTS + 1))
-    full = np.arange(MOST_EVENTS + 1) > 0
+    full = np.array([events > 0 for events in range(MOST_EVENTS + 1)])
     return weigh(poisson(expected), np.array(expected), found, _width(found, full, log_scale=False))
 
 

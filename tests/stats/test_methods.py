@@ -33,7 +33,9 @@ SHARED = (*methods.PAIR_METHODS, *methods.RATE_METHODS, *methods.PAIR_TESTS, *me
 WITHOUT_NUMPY = """
 import sys
 from fourcount.stats import methods
-from fourcount.stats.results import Counts
+from fourcount.stats.results import Counts, PairCounts, Rates
+pairs = PairCounts(both=27, index_only=29, reference_only=3, neither=4)
+rates = Rates(index_events=41, index_time=28010.0, reference_events=15, reference_time=19017.0)
 counts = Counts(index_events=15, index_non_events=85, reference_events=5, reference_non_events=95)
 for name in ("score", "textbook"):
     family = methods.FAMILIES[name]
@@ -41,6 +43,14 @@ for name in ("score", "textbook"):
     for measure in ("risk_difference", "risk_ratio", "odds_ratio"):
         methods.method(measure, getattr(family, measure)).interval(counts, 0.95)
     methods.test(family.test).p(counts)
+    of_pairs, of_rates = methods.PAIR_FAMILIES[name], methods.RATE_FAMILIES[name]
+    for part in ("difference", "ratio", "odds_ratio"):
+        methods.method("pair_" + part, getattr(of_pairs, part)).interval(pairs, 0.95)
+    for part in ("difference", "ratio"):
+        methods.method("rate_" + part, getattr(of_rates, part)).interval(rates, 0.95)
+    methods.method("rate", of_rates.rate).interval(41, 28010.0, 0.95)
+    methods.test(of_pairs.test).p(pairs)
+    methods.test(of_rates.test).p(rates)
 print(sorted({name.split(".")[0] for name in sys.modules} & {"numpy", "scipy", "statistics", "fractions"}))
 """
 
@@ -103,7 +113,7 @@ def test_a_key_that_is_not_there_is_an_error() -> None:
 
 
 def test_score_and_textbook_need_neither_numpy_nor_scipy() -> None:
-    """Both families answer a table in an interpreter that has loaded neither."""
+    """Both families answer a table, pairs and rates in an interpreter that has loaded neither."""
     answer = subprocess.run(
         [sys.executable, "-c", WITHOUT_NUMPY], check=True, capture_output=True, text=True, timeout=60
     )

@@ -107,6 +107,14 @@ def test_limits_put_back_into_the_binomial(method: Method, own: float, level: fl
         assert (interval.low == 0, interval.high == math.inf) == (f == 0, g == 0)
 
 
+@pytest.mark.parametrize("method", CONDITIONAL)
+def test_the_way_for_many_begins_where_that_for_few_ends(method: Method) -> None:
+    """Twenty thousand discordant pairs and one more: the limits' distances from the estimate shrink as 1/sqrt."""
+    few, more = (given_interval(method(_of(12_000, rest), 0.95)) for rest in (8_000, 8_001))
+    assert math.log(few.low / more.low) == pytest.approx(math.log(8_001 / 8_000), rel=0.02)
+    assert math.log(few.high / more.high) == pytest.approx(math.log(8_001 / 8_000), rel=0.02)
+
+
 def test_log_limits_are_those_of_a_conditional_logistic_regression() -> None:
     """29 against 3 discordant pairs: statsmodels' estimate and limits, to its optimiser's 3 digits."""
     outcomes = np.tile([1, 0], 32)

@@ -8,18 +8,17 @@ the limit of x's share over the opposite limit of y's share, which sums to 1 wit
 from __future__ import annotations
 
 import math
-from collections.abc import Callable
 from typing import NamedTuple
 
 from fourcount.stats.normal import quantile
 from fourcount.stats.poisson import log_peak, log_poisson
 from fourcount.stats.results import Gap, Interval
 from fourcount.stats.risk import score_limits
+from fourcount.stats.roots import increasing_root
 
 _PLAIN_TERMS = 4096  # more of them are summed in chunks
 _ENOUGH = 1e-17
-
-ShareLimits = Callable[[int, int, float], tuple[float, float]]
+_FEW = 20_000  # up to so many the limits are found here, term by term; among more scipy's beta distribution is quicker
 
 
 class Tails(NamedTuple):
@@ -32,16 +31,12 @@ class Tails(NamedTuple):
 
 def exact(first: int, second: int, level: float) -> Interval:
     """Clopper and Pearson's limits of the share (1934, Biometrika 26:404), as odds; not for no counts at all."""
-    from fourcount.stats.binomial import clopper_pearson_limits
-
-    return _as_odds(clopper_pearson_limits, first, second, level)
+    return _conditional(first, second, level, own=1.0)
 
 
 def mid_p(first: int, second: int, level: float) -> Interval:
     """The mid-P limits of the share, as odds; not for no counts at all."""
-    from fourcount.stats.binomial import mid_p_limits
-
-    return _as_odds(mid_p_limits, first, second, level)
+    return _conditional(first, second, level, own=0.5)
 
 
 def score(first: int, second: int, level: float) -> Interval:
@@ -59,20 +54,64 @@ def log(first: int, second: int, level: float) -> Interval | Gap:
     return Interval(low=first / second / factor, high=first / second * factor)
 
 
-def _as_odds(limits: ShareLimits, first: int, second: int, level: float) -> Interval:
+def _conditional(first: int, second: int, level: float, own: float) -> Interval:
+    """Limits at which a tail of x, with this share of P(X = x), holds half of what the level leaves."""
+    if first + second > _FEW:
+        return _conditional_of_many(first, second, level, own)
+    tail = (1.0 - level) / 2.0
+    near = score(first, second, level)
+    low = _lower(first, second, tail, own, near.low)
+    other = _lower(second, first, tail, own, 1.0 / near.high)
+    return Interval(low=low, high=1.0 / other if other > 0.0 else math.inf)
+
+
+def _conditional_of_many(first: int, second: int, level: float, own: float) -> Interval:
+    from fourcount.stats.binomial import clopper_pearson_limits, mid_p_limits
+
+    limits = clopper_pearson_limits if own == 1.0 else mid_p_limits
     low, high = limits(first, first + second, level)
     other_low, other_high = limits(second, first + second, level)
     return Interval(low=low / other_high, high=high / other_low if second else math.inf)
 
 
+def _lower(first: int, second: int, tail: float, own: float, start: float) -> float:
+    """The odds at which P(X > x) + own P(X = x) is ``tail``; 0 for no x, in closed form for no y."""
+    if first == 0:
+        return 0.0
+    if second == 0:
+        return 1.0 / math.expm1(-math.log(tail / own) / first)
+    goal = math.log(tail)
+
+    def curve(odds: float) -> tuple[float, float]:
+        share, other_share = odds / (1.0 + odds), 1.0 / (1.0 + odds)
+        total, beyond, term = own, 0.0, 1.0
+        for step in range(1, second + 1):
+            term *= (second + 1 - step) / (first + step) * odds
+            total += term
+            beyond += step * term
+            if step * term <= _ENOUGH * total:
+                break
+        away = first * other_share - second * share
+        # d ln P(tail) / d ln odds is the mean of the tail less the mean of all.
+        slope = (away + beyond / total) / odds
+        return _log_probability(first, second, share, other_share, away) + math.log(total) - goal, slope
+
+    return increasing_root(curve, 0.0, 16.0 * first / second, start)
+
+
+def _log_probability(first: int, second: int, share: float, other_share: float, away: float) -> float:
+    """ln P(X = x), ``away`` being x less its expectation."""
+    whole = first + second
+    parts = log_poisson(first, whole * share, away) + log_poisson(second, whole * other_share, -away)
+    return parts - log_peak(whole)
+
+
 def tails(first: int, second: int, weights: tuple[float, float] = (1.0, 1.0)) -> Tails:
     """Both binomial tails of x among x + y, its share under the hypothesis being w1 / (w1 + w2)."""
-    whole, weight = first + second, weights[0] + weights[1]
+    weight = weights[0] + weights[1]
     share, other_share = weights[0] / weight, weights[1] / weight
     away = first * other_share - second * share
-    own = math.exp(
-        log_poisson(first, whole * share, away) + log_poisson(second, whole * other_share, -away) - log_peak(whole)
-    )
+    own = math.exp(_log_probability(first, second, share, other_share, away))
     if away <= 0.0:
         below = min(1.0, own * _sum_over_own(first, second, other_share / share))
         return Tails(below=below, own=own, above=min(1.0, 1.0 - below + own))
