@@ -5,7 +5,7 @@ from __future__ import annotations
 import mpmath
 import pytest
 
-from fourcount.stats.normal import quantile, two_sided_p
+from fourcount.stats.normal import quantile, two_sided_p, z_of_p
 
 
 @pytest.mark.parametrize("level", [0.5, 0.8, 0.9, 0.95, 0.975, 0.99, 0.995, 0.999])
@@ -40,3 +40,22 @@ def test_two_sided_p_far_into_the_tail(z: float) -> None:
 def test_p_and_quantile_undo_each_other() -> None:
     """The p at a level's z is what the level leaves to 1."""
     assert two_sided_p(quantile(0.99)) == pytest.approx(0.01, rel=1e-13)
+
+
+@pytest.mark.parametrize("p", [1e-299, 1e-100, 1e-17, 1e-3, 0.034, 0.5, 0.97, 1 - 1e-9])
+def test_a_p_far_below_what_a_level_leaves_has_its_z(p: float) -> None:
+    """The p of the z is the p again, to 11 digits; from 1 - p alone a tail below 1e-16 could not be told."""
+    assert z_of_p(p) > 0
+    assert two_sided_p(z_of_p(p)) == pytest.approx(p, rel=1e-11)
+
+
+def test_a_p_below_what_doubles_hold_in_full_has_the_z_of_the_least_one() -> None:
+    """The smallest double has the z of 1e-300: nobody prints such a p, and the digits end there."""
+    assert z_of_p(5e-324) == z_of_p(1e-300) == pytest.approx(37.065, abs=1e-3)
+
+
+@pytest.mark.parametrize("p", [0.0, 1.0, -0.1, 3.0])
+def test_z_refuses_what_is_no_p(p: float) -> None:
+    """0 has no z, 1 has that of no effect: the caller says so before."""
+    with pytest.raises(ValueError, match="a p lies"):
+        z_of_p(p)

@@ -264,7 +264,7 @@ def test_strata_that_each_tell_nothing_of_an_odds_ratio_are_none() -> None:
 
 
 def test_confounding_that_pooling_takes_away() -> None:
-    """Invented: the index group is the sicker one; the crude risk ratio is 2.3, in each stratum and pooled it is 0.8."""
+    """Invented: the index group is sicker; the crude risk ratio is 2.3, in each stratum and pooled it is 0.8."""
     strata = [counts_of((160, 240, 50, 50)), counts_of((4, 96, 20, 380))]
     assert pooled.pooled_risk_ratio(strata) == pytest.approx(0.8)
     crude = counts_of((164, 336, 70, 430))

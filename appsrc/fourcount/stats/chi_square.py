@@ -13,7 +13,7 @@ def upper_tail(chi_square: float, degrees: int) -> float:
     formed through its logarithm, so that none passes the range of a double. Source: Abramowitz and Stegun 1964,
     Handbook of Mathematical Functions, 26.4.4 and 26.4.5.
     """
-    if degrees < 1 or chi_square < 0.0:
+    if degrees < 1 or not chi_square >= 0.0:
         raise ValueError(f"no chi-square of {degrees} degrees of freedom: {chi_square!r}")
     half = chi_square / 2.0
     if half == 0.0:
