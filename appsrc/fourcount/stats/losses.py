@@ -48,17 +48,6 @@ def imputed(counts: Counts, lost: Lost, scenario: Scenario) -> FractionalCounts 
     return _put_back(counts, lost, lost.index if index_all else 0, lost.reference if reference_all else 0)
 
 
-def scenarios(counts: Counts, lost: Lost) -> dict[Scenario, FractionalCounts] | Gap:
-    """Every scenario's table, in the order of ``SCENARIOS``."""
-    tables: dict[Scenario, FractionalCounts] = {}
-    for scenario in SCENARIOS:
-        table = imputed(counts, lost, scenario)
-        if isinstance(table, Gap):
-            return table
-        tables[scenario] = table
-    return tables
-
-
 def _who(counts: Counts, lost: Lost, scenario: Scenario) -> tuple[bool, bool]:
     """Whether all the lost of the index group, and of the reference group, had the event."""
     if scenario in ("none", "all"):
