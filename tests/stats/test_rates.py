@@ -101,6 +101,22 @@ def test_libraries_agree_about_p() -> None:
         assert _given(rates.binomial_mid_p(counts)) == pytest.approx(2 * min(below, above) - own, rel=1e-9)
 
 
+STORED = (
+    ((10**9, 1e9, 10**9, 1_000_100_000.0), 0.02535610650908777, 0.02535464164469346),
+    ((10**6, 3.0, 2_003_000, 6.0), 0.2211202483967909, 0.2208893624338727),
+    ((12, 1e-9, 10**9, 0.1), 0.6064477108058785, 0.5116673799558682),
+    ((40, 7.5, 10, 3.25), 0.1477013042348873, 0.1111815619330139),
+)
+"""Rates, exact p, mid-P p: the binomial tail term by term in mpmath at 40 digits, which takes seconds for the first."""
+
+
+@pytest.mark.parametrize(("table", "exact", "mid_p"), STORED)
+def test_p_among_very_many_events(table: Table, exact: float, mid_p: float) -> None:
+    """Two thousand million events keep eleven digits of p."""
+    assert _given(rates.binomial_exact(rates_of(table))) == pytest.approx(exact, rel=1e-11)
+    assert _given(rates.binomial_mid_p(rates_of(table))) == pytest.approx(mid_p, rel=1e-11)
+
+
 def _difference_statistic(table: Table) -> Callable[[Any], Any]:
     """The published statistic; the likeliest reference rate is the root of a quadratic equation."""
     x1, t1, x2, t2 = (mpmath.mpf(value) for value in table)
