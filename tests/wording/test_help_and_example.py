@@ -7,10 +7,35 @@ import sys
 
 import pytest
 
-from fourcount.stats.methods import METHODS, TESTS
+from fourcount.stats.entries.extras import EXTRAS
+from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
+from fourcount.stats.methods import (
+    HOMOGENEITY_TESTS,
+    METHODS,
+    PAIR_METHODS,
+    PAIR_TESTS,
+    RATE_METHODS,
+    RATE_TESTS,
+    STRATA_METHODS,
+    STRATA_TESTS,
+    TESTS,
+    TIMED_METHODS,
+)
 from fourcount.wording.example import worked_example
-from fourcount.wording.help import HEADINGS, limits_of_the_program, methods_and_sources, terms
+from fourcount.wording.help import (
+    FROM_PRINT,
+    HEADINGS,
+    LETTERS,
+    PRINT_ONLY_HEADING,
+    entering,
+    limits_of_the_program,
+    methods_and_sources,
+    terms,
+)
+from fourcount.wording.labels import FORMS
 
+ALL_METHODS = (*METHODS, *PAIR_METHODS, *RATE_METHODS, *STRATA_METHODS, *TIMED_METHODS)
+SHOWN = (*ALL_METHODS, *TESTS, *PAIR_TESTS, *RATE_TESTS, *STRATA_TESTS, *HOMOGENEITY_TESTS, *EXTRAS)
 LIGHT = ("cautions", "facts", "gaps", "names", "numbers")
 OTHERS = (
     "basis", "carried", "example", "headline", "help", "limits", "lines", "meanings", "patient", "patient_sentence",
@@ -21,14 +46,42 @@ OTHERS = (
 def test_help_lists_every_method_and_every_test_once():
     """Straight from the tables, in their order."""
     sections = methods_and_sources()
-    listed = [entry[0] for _, entries in sections for entry in entries]
-    assert sorted(listed) == sorted([m.title for m in METHODS] + [t.title for t in TESTS])
+    listed = [entry[0] for heading, entries in sections for entry in entries if heading != PRINT_ONLY_HEADING]
+    assert sorted(listed) == sorted([entry.title for entry in SHOWN] + [entry[0] for entry in FROM_PRINT])
+    assert len(dict(sections)[PRINT_ONLY_HEADING]) == len(PRINT_METHODS) + len(PRINT_TESTS)
     assert all(title and formula and source for _, entries in sections for title, formula, source, _ in entries)
 
 
 def test_every_measure_with_methods_has_a_heading():
     """A new measure needs its words."""
-    assert {method.measure for method in METHODS} <= set(HEADINGS)
+    assert {entry.measure for entry in ALL_METHODS} == set(HEADINGS)
+
+
+def test_every_letter_of_a_formula_is_explained():
+    """Those of pairs, of person-time and of strata too."""
+    for letter in (
+        "e have",
+        "f on the index side",
+        "g on the reference side",
+        "h on neither",
+        "x1",
+        "t2",
+        "Σ",
+        "l and u",
+    ):
+        assert letter in LETTERS
+
+
+@pytest.mark.parametrize("specimen", FORMS.values())
+def test_every_form_of_entry_is_explained_by_its_specimen(specimen):
+    """In the words of the choice itself, in whole sentences."""
+    assert dict(entering())[specimen].endswith(".")
+
+
+@pytest.mark.parametrize("name", ["paste", "what the paper prints"])
+def test_the_paste_and_the_check_are_explained(name):
+    """With what they take."""
+    assert dict(entering())[name].endswith(".")
 
 
 @pytest.mark.parametrize(
@@ -36,7 +89,8 @@ def test_every_measure_with_methods_has_a_heading():
     [
         "index group", "reference group", "event counted", "difference per 100", "NNTB", "NNTH", "through infinity",
         "risk ratio", "odds ratio", "as a risk ratio at 12%", "interval", "level", "score", "textbook", "exact",
-        "starting risk", "on balance", "avoided", "added",
+        "starting risk", "on balance", "avoided", "added", "pairs that differ", "rate", "hazard ratio", "risk at a time",
+        "strata", "pooled", "crude", "adjusted", "add up", "lost", "fragility", "E-value", "attributable", "design effect",
     ],
 )  # fmt: skip
 def test_every_word_of_the_window_is_explained(term):

@@ -24,6 +24,20 @@ MEASURE_NAMES = {
     "risk_ratio": "risk ratio",
     "other_risk_ratio": "risk ratio of the other outcome",
     "odds_ratio": "odds ratio",
+    "hazard_ratio": "hazard ratio",
+    "rate": "rate",
+    "rate_index": "rate",
+    "rate_reference": "rate",
+    "rate_difference": "rate difference",
+    "rate_ratio": "rate ratio",
+    "pair_risk_index": "risk",
+    "pair_risk_reference": "risk",
+    "pair_difference": "paired difference",
+    "pair_ratio": "paired risk ratio",
+    "pair_odds_ratio": "odds ratio of the pairs",
+    "pooled_risk_difference": "pooled difference",
+    "pooled_risk_ratio": "pooled risk ratio",
+    "pooled_odds_ratio": "pooled odds ratio",
 }
 RATIO_OF_PREVALENCES = "prevalence ratio"
 COUNT_WORDS = ("None", "One", "Two", "Three", "Four")

@@ -13,7 +13,7 @@ NAMES = {
     "hazard_ratio": "hazard ratio",
     "rate_ratio": "rate ratio",
     "risk_difference": "risk difference",
-    "rate_difference": "difference of rates",
+    "rate_difference": "rate difference",
     "relative_reduction": "relative reduction",
     "number_needed": "number needed",
     "risk": "risk",

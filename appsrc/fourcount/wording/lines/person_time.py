@@ -24,7 +24,7 @@ def rate_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) ->
 def rate_name(key: str, outcome: Outcome) -> str:
     """What a line of person-time calls its measure."""
     return {
-        "rate_difference": "Difference of rates",
+        "rate_difference": "Rate difference",
         "rate_reference": f"Rate, {names.label_within(outcome, 'reference')}",
         "rate_index": f"Rate, {names.label_within(outcome, 'index')}",
         "rate_ratio": "Rate ratio",
