@@ -39,3 +39,4 @@ POOLED_METHOD_KEYS = {
 TIMED_METHOD_KEYS = {"timed_difference": {"square-and-add"}, "timed_ratio": {"square-and-add"}}
 STRATA_TEST_KEYS = ("cmh", "cmh-corrected")
 HOMOGENEITY_TEST_KEYS = ("breslow-day", "breslow-day-tarone")
+RECOVERY_KEYS = ("recovery-limits", "recovery-p", "interaction")

@@ -7,9 +7,9 @@ import math
 
 import pytest
 
-from contract_keys import HOMOGENEITY_TEST_KEYS, POOLED_METHOD_KEYS, STRATA_TEST_KEYS, TIMED_METHOD_KEYS
+from contract_keys import HOMOGENEITY_TEST_KEYS, POOLED_METHOD_KEYS, RECOVERY_KEYS, STRATA_TEST_KEYS, TIMED_METHOD_KEYS
 from fourcount.stats import methods
-from fourcount.stats.entries.entry import HomogeneityEntry, Method, Test
+from fourcount.stats.entries.entry import Calculation, HomogeneityEntry, Method, Test
 from fourcount.stats.results import GAP_KEYS, Counts, Gap
 from tables import counts_of
 
@@ -24,6 +24,7 @@ def test_the_keys_are_those_that_other_programs_read() -> None:
         assert sorted(listed) == sorted((measure, key) for measure, of_it in keys.items() for key in of_it)
     assert [entry.key for entry in methods.STRATA_TESTS] == list(STRATA_TEST_KEYS)
     assert [entry.key for entry in methods.HOMOGENEITY_TESTS] == list(HOMOGENEITY_TEST_KEYS)
+    assert [entry.key for entry in methods.RECOVERIES] == list(RECOVERY_KEYS)
 
 
 def test_every_entry_is_found_by_its_key() -> None:
@@ -36,8 +37,18 @@ def test_every_entry_is_found_by_its_key() -> None:
         assert methods.homogeneity_test(homogeneity.key) is homogeneity
 
 
-@pytest.mark.parametrize("entry", [*methods.STRATA_METHODS, *methods.STRATA_TESTS, *methods.HOMOGENEITY_TESTS])
-def test_every_entry_says_what_it_is(entry: Method | Test | HomogeneityEntry) -> None:
+@pytest.mark.parametrize(
+    "entry",
+    [
+        *methods.STRATA_METHODS,
+        *methods.STRATA_TESTS,
+        *methods.HOMOGENEITY_TESTS,
+        *methods.TIMED_METHODS,
+        *methods.RECOVERIES,
+    ],
+    ids=lambda entry: entry.title,
+)
+def test_every_entry_says_what_it_is(entry: Method | Test | HomogeneityEntry | Calculation) -> None:
     """Title, formula, source and note are there, the note a whole sentence."""
     assert entry.title
     assert entry.formula

@@ -17,6 +17,7 @@ from fourcount.stats.entries.extras import EXTRAS
 from fourcount.stats.entries.odds_ratios import ODDS_RATIO_METHODS
 from fourcount.stats.entries.pairs import PAIR_METHODS, PAIR_TESTS
 from fourcount.stats.entries.rates import RATE_METHODS, RATE_TESTS
+from fourcount.stats.entries.recovery import RECOVERIES
 from fourcount.stats.entries.risks import RISK_METHODS
 from fourcount.stats.entries.strata import HOMOGENEITY_TESTS, STRATA_METHODS, STRATA_TESTS
 from fourcount.stats.entries.timed import TIMED_METHODS
@@ -33,6 +34,7 @@ __all__ = [
     "RATE_FAMILIES",
     "RATE_METHODS",
     "RATE_TESTS",
+    "RECOVERIES",
     "STRATA_METHODS",
     "STRATA_TESTS",
     "TESTS",

@@ -40,7 +40,7 @@ GAP_KEYS = (
     "no-reference-events",  # an infinite ratio only says that the unexposed had no event: no share of events follows
     "endless-log",  # a ratio of 0 or without end has no logarithm, and the formula needs one
     "endless-limit",  # a limit without end gives no standard error
-    "p-out-of-range",  # a p that is 0, 1 or beyond gives no standard error
+    "p-out-of-range",  # a p of 0, of 1 or beyond gives no standard error
     "estimate-at-no-effect",  # an estimate at no effect has the p of 1 whatever its standard error is
     "level-not-printed",  # limits printed at one level give none at another
     "loss-ratio-out-of-range",  # the ratio of the risk among the lost is 0 or more
