@@ -166,15 +166,15 @@ def test_score_limits_of_the_ratio_put_back_into_the_statistic(level: float, exa
         assert (interval.low == 0, interval.high == math.inf) == (table[0] == 0, table[2] == 0)
 
 
-@pytest.mark.parametrize(("method", "test"), [(rates.exact_ratio, 0), (rates.mid_p_ratio, 0.5)])
+@pytest.mark.parametrize(("method", "off"), [(rates.exact_ratio, 0), (rates.mid_p_ratio, 0.5)])
 @pytest.mark.parametrize("level", [0.8, 0.95, 0.999])
-def test_conditional_limits_put_back_into_the_binomial(method: Method, test: float, level: float) -> None:
+def test_conditional_limits_put_back_into_the_binomial(method: Method, off: float, level: float) -> None:
     """At either limit the tail of x1 from the observed split outwards holds half of what the level leaves."""
     for x1, t1, x2, t2 in ((11, 800.0, 21, 3011.0), (1, 2.0, 9, 0.5), (30, 1e-3, 60, 7.0), (1, 1.0, 1, 1.0)):
         interval = given_interval(method(rates_of((x1, t1, x2, t2)), level))
         below, above = (binom(x1 + x2, odds / (1 + odds)) for odds in (interval.low * t1 / t2, interval.high * t1 / t2))
-        assert below.sf(x1 - 1) - test * below.pmf(x1) == pytest.approx((1 - level) / 2, rel=1e-9)
-        assert above.cdf(x1) - test * above.pmf(x1) == pytest.approx((1 - level) / 2, rel=1e-9)
+        assert below.sf(x1 - 1) - off * below.pmf(x1) == pytest.approx((1 - level) / 2, rel=1e-9)
+        assert above.cdf(x1) - off * above.pmf(x1) == pytest.approx((1 - level) / 2, rel=1e-9)
 
 
 def test_no_event_at_all() -> None:

@@ -56,7 +56,7 @@ def log(first: int, second: int, level: float) -> Interval | Gap:
 
 def _conditional(first: int, second: int, level: float, own: float) -> Interval:
     """Limits at which a tail of x, with this share of P(X = x), holds half of what the level leaves."""
-    if first + second > _FEW:
+    if first and second and first + second > _FEW:
         return _conditional_of_many(first, second, level, own)
     tail = (1.0 - level) / 2.0
     near = score(first, second, level)
@@ -71,7 +71,7 @@ def _conditional_of_many(first: int, second: int, level: float, own: float) -> I
     limits = clopper_pearson_limits if own == 1.0 else mid_p_limits
     low, high = limits(first, first + second, level)
     other_low, other_high = limits(second, first + second, level)
-    return Interval(low=low / other_high, high=high / other_low if second else math.inf)
+    return Interval(low=low / other_high, high=high / other_low)
 
 
 def _lower(first: int, second: int, tail: float, own: float, start: float) -> float:
