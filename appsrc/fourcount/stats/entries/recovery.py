@@ -22,8 +22,8 @@ RECOVERIES = (
         key="recovery-p",
         title="Interval of a printed p",
         formula=(
-            "error = |ln(estimate)|/zp for ratios, |estimate|/zp for differences, zp the normal value whose two-sided p "
-            "is printed; estimate ∓ z error, on the log scale for ratios"
+            "error = |ln(estimate)|/zp for ratios, |estimate|/zp for differences, zp the normal value whose two-sided "
+            "p is printed; estimate ∓ z error, on the log scale for ratios"
         ),
         source="Altman and Bland 2011, BMJ 343:d2090",
         note=(

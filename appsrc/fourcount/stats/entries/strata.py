@@ -28,8 +28,8 @@ STRATA_METHODS = (
         formula=("D = Σ((a n2 − c n1)/N) / W, W = Σ(n1 n2/N); D ∓ z √(Σ((ab n2³ + cd n1³)/(n1 n2 N²)))/W"),
         source="Greenland and Robins 1985, Biometrics 41:55",
         note=(
-            "Holds for few large strata; with one stratum it is Wald’s interval. Can pass −100 or 100 points. "
-            + _ALL_FAMILIES
+            "Holds for few large strata, and is too narrow with many small ones; with one stratum it is Wald’s. "
+            "Can pass −100 or 100 points. " + _ALL_FAMILIES
         ),
     ),
     Method(
@@ -89,7 +89,10 @@ HOMOGENEITY_TESTS = (
             "odds ratio; degrees of freedom: strata less one"
         ),
         source="Breslow and Day 1980",
-        note="A stratum without events, or with nothing else, is not counted. It finds little in small strata.",
+        note=(
+            "A stratum without events, or with nothing else, is not counted. In strata of a few people it finds "
+            "differences that are not there, and in few strata it overlooks large ones."
+        ),
         test=strata.breslow_day,
     ),
     HomogeneityEntry(
@@ -97,7 +100,10 @@ HOMOGENEITY_TESTS = (
         title="Breslow–Day with Tarone’s correction",
         formula="Breslow and Day’s chi-square less (Σa − ΣA)²/Σv, the same degrees of freedom",
         source="Tarone 1985, Biometrika 72:91",
-        note="Takes off what the pooled odds ratio, which is not the likeliest one, adds.",
+        note=(
+            "Takes off what the pooled odds ratio, which is not the likeliest one, adds. In strata of a few people it "
+            "finds differences that are not there."
+        ),
         test=strata.breslow_day_tarone,
     ),
 )
