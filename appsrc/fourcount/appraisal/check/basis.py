@@ -43,7 +43,7 @@ def basis_of(findings: OutcomeFindings) -> Basis:
         return of_pairs(given)
     if isinstance(given, Rates):
         return of_rates(given)
-    return Basis(candidates=lambda says: timed(given, says)) if isinstance(given, TimedRisks) else Basis()
+    return of_timed(given) if isinstance(given, TimedRisks) else Basis()
 
 
 def of_counts(counts: Counts) -> Basis:
@@ -75,6 +75,11 @@ def of_rates(rates: Rates) -> Basis:
         tests=lambda: _all_tests(RATE_TESTS, rates),
         largest=max(rates.index_events, rates.reference_events),
     )
+
+
+def of_timed(risks: TimedRisks) -> Basis:
+    """Two printed risks with their limits."""
+    return Basis(candidates=lambda says: timed(risks, says))
 
 
 def of_strata(strata: tuple[Counts, ...], crude: Counts) -> Basis:

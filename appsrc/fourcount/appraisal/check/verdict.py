@@ -65,7 +65,7 @@ def _from_counts(
     elif hits[0].match.fit == "all" or (hits[0].match.fit == "interval" and figure.estimate is None):
         yield from _whole(figure, hits, candidates)
     elif hits[0].match.fit == "interval":
-        yield _interval_only(figure, hits)
+        yield _near(figure, candidates, heavy=heavy) or _interval_only(figure, hits)
     else:
         yield from _estimate_alone(figure, hits, candidates, heavy=heavy)
     if figure.measure == "hazard_ratio":
@@ -110,14 +110,19 @@ def _nothing_fits(figure: PrintedFigure, candidates: tuple[Candidate, ...], *, h
     if figure.adjusted:
         yield Finding(key="adjusted", facts=_facts(nearest, ""), agrees=True)
         return
+    near = _near(figure, candidates, heavy=heavy)
+    yield near or Finding(key="nearest", facts=_facts(nearest, nearest.match.method))
+
+
+def _near(figure: PrintedFigure, candidates: tuple[Candidate, ...], *, heavy: bool) -> Finding | None:
+    """A near miss of the print's own measure as read, where no estimate fits."""
     for candidate in candidates:
         if candidate.heavy or not candidate.named or candidate.orientation != "as-read":
             continue
         miss = near_miss(figure, candidate, heavy=heavy)
         if miss is not None:
-            yield _missed(figure, candidate, miss)
-            return
-    yield Finding(key="nearest", facts=_facts(nearest, nearest.match.method))
+            return _missed(figure, candidate, miss)
+    return None
 
 
 def _interval_only(figure: PrintedFigure, hits: tuple[Hit, ...]) -> Finding:
