@@ -13,6 +13,8 @@ from fourcount.stats.log_scale import exponential
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import FractionalCounts, Gap, Interval
 
+_LAST_BITS = 1e-15
+
 
 def exposed_fraction(ratio: float) -> float | Gap:
     """The share of the exposed people's events: (R - 1)/R.
@@ -23,7 +25,8 @@ def exposed_fraction(ratio: float) -> float | Gap:
         return Gap("not-positive", {"value": ratio})
     if math.isinf(ratio):
         return Gap("no-reference-events")
-    return _of_ratio(ratio) if ratio >= 1.0 else Gap("ratio-below-one", {"ratio": ratio})
+    # Counts divided by a design effect can turn a ratio of exactly 1 into one a last bit below.
+    return max(_of_ratio(ratio), 0.0) if ratio >= 1.0 - _LAST_BITS else Gap("ratio-below-one", {"ratio": ratio})
 
 
 def exposed_fraction_interval(ratio: float, interval: Interval) -> Interval | Gap:
@@ -61,7 +64,7 @@ def population_fraction(counts: FractionalCounts) -> float | Gap:
     if isinstance(fraction, Gap):
         return fraction
     a, b, c, d = _cells(counts)
-    return (a * d - b * c) / (counts.reference_total * counts.events)
+    return max((a * d - b * c) / (counts.reference_total * counts.events), 0.0)
 
 
 def population_fraction_interval(counts: FractionalCounts, level: float) -> Interval | Gap:
