@@ -14,8 +14,8 @@ from fourcount.record.outcome import EventsAndOthers
 from fourcount.record.paper import Choices
 from fourcount.wording import numbers
 from fourcount.wording.headline import DO_NOT_ADD_UP, choose
-from fourcount.wording.patient import patient_words
 from fourcount.wording.headlines.people import COMPATIBLE
+from fourcount.wording.patient import patient_words
 from fourcount.wording.sentence import headline
 
 cells = st.integers(min_value=0, max_value=10**9) | st.integers(min_value=0, max_value=60)

@@ -9,6 +9,7 @@ import pytest
 
 from fourcount.stats.entries.extras import EXTRAS
 from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
+from fourcount.stats.entries.recovery import RECOVERIES
 from fourcount.stats.methods import (
     HOMOGENEITY_TESTS,
     METHODS,
@@ -23,7 +24,6 @@ from fourcount.stats.methods import (
 )
 from fourcount.wording.example import worked_example
 from fourcount.wording.help import (
-    FROM_PRINT,
     HEADINGS,
     LETTERS,
     PRINT_ONLY_HEADING,
@@ -35,7 +35,7 @@ from fourcount.wording.help import (
 from fourcount.wording.labels import FORMS
 
 ALL_METHODS = (*METHODS, *PAIR_METHODS, *RATE_METHODS, *STRATA_METHODS, *TIMED_METHODS)
-SHOWN = (*ALL_METHODS, *TESTS, *PAIR_TESTS, *RATE_TESTS, *STRATA_TESTS, *HOMOGENEITY_TESTS, *EXTRAS)
+SHOWN = (*ALL_METHODS, *TESTS, *PAIR_TESTS, *RATE_TESTS, *STRATA_TESTS, *HOMOGENEITY_TESTS, *EXTRAS, *RECOVERIES)
 LIGHT = ("cautions", "facts", "gaps", "names", "numbers")
 OTHERS = (
     "basis", "carried", "example", "headline", "help", "limits", "lines", "meanings", "patient", "patient_sentence",
@@ -47,7 +47,7 @@ def test_help_lists_every_method_and_every_test_once():
     """Straight from the tables, in their order."""
     sections = methods_and_sources()
     listed = [entry[0] for heading, entries in sections for entry in entries if heading != PRINT_ONLY_HEADING]
-    assert sorted(listed) == sorted([entry.title for entry in SHOWN] + [entry[0] for entry in FROM_PRINT])
+    assert sorted(listed) == sorted(entry.title for entry in SHOWN)
     assert len(dict(sections)[PRINT_ONLY_HEADING]) == len(PRINT_METHODS) + len(PRINT_TESTS)
     assert all(title and formula and source for _, entries in sections for title, formula, source, _ in entries)
 
@@ -89,8 +89,9 @@ def test_the_paste_and_the_check_are_explained(name):
     [
         "index group", "reference group", "event counted", "difference per 100", "NNTB", "NNTH", "through infinity",
         "risk ratio", "odds ratio", "as a risk ratio at 12%", "interval", "level", "score", "textbook", "exact",
-        "starting risk", "on balance", "avoided", "added", "pairs that differ", "rate", "hazard ratio", "risk at a time",
-        "strata", "pooled", "crude", "adjusted", "add up", "lost", "fragility", "E-value", "attributable", "design effect",
+        "starting risk", "on balance", "avoided", "added", "pairs that differ", "rate", "hazard ratio",
+        "risk at a time", "strata", "pooled", "crude", "adjusted", "add up", "lost", "fragility", "E-value",
+        "attributable", "design effect",
     ],
 )  # fmt: skip
 def test_every_word_of_the_window_is_explained(term):

@@ -2,7 +2,18 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, Given, OutcomeFindings, PrintedFigure, TimedRisks
+import msgspec
+
+from fourcount.appraisal.findings import (
+    AnyNumberNeeded,
+    Figure,
+    Gap,
+    Given,
+    OutcomeFindings,
+    PrintedFigure,
+    Recovered,
+    TimedRisks,
+)
 from fourcount.record.outcome import COUNTED_FORMS
 from fourcount.record.paper import Choices
 
@@ -21,17 +32,28 @@ def given(findings: OutcomeFindings) -> Given | Gap:
 
 
 def lacking(findings: OutcomeFindings) -> Gap | None:
-    """Why nothing can be said of this table yet; None where something can."""
+    """Why nothing can be said of this table yet; None where something can.
+
+    A table can lack a part and still say something: pairs that differ give their odds ratio without those that agree.
+    """
     found = given(findings)
-    return found if isinstance(found, Gap) else None
+    if not isinstance(found, Gap) or any(not isinstance(measure, Gap) for measure in findings.measures.values()):
+        return None
+    return found
 
 
 def level_of(findings: OutcomeFindings, choices: Choices) -> float:
     """The level of the intervals that are shown: the record's, or that of the print where only the print has any."""
     found = findings.given
-    if isinstance(found, PrintedFigure):
+    recovered = findings.extras.recovered
+    if isinstance(found, PrintedFigure) and not (isinstance(recovered, Recovered) and recovered.from_p):
         return found.level or PRINTED_LEVEL
     return found.level if isinstance(found, TimedRisks) else choices.level
+
+
+def crude(findings: OutcomeFindings) -> OutcomeFindings:
+    """The findings of all strata thrown together; the odds ratio that was converted there is the pooled one."""
+    return msgspec.structs.replace(findings, conversion=Gap(NO_COUNTS))
 
 
 def measure_of(key: str, findings: OutcomeFindings) -> Figure | AnyNumberNeeded | Gap:

@@ -7,6 +7,7 @@ from collections.abc import Sequence
 from fourcount.stats.entries.entry import Calculation, HomogeneityEntry
 from fourcount.stats.entries.extras import EXTRAS
 from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
+from fourcount.stats.entries.recovery import RECOVERIES
 from fourcount.stats.methods import (
     HOMOGENEITY_TESTS,
     METHODS,
@@ -52,28 +53,7 @@ STRATA_TESTS_HEADING = "Tests of no association within strata"
 HOMOGENEITY_HEADING = "Tests of one odds ratio for all strata"
 EXTRAS_HEADING = "Beside the measures"
 PRINT_ONLY_HEADING = "Recognised in what a paper prints, and not given here"
-PRINT_HEADING = "From a printed result"
-
-FROM_PRINT: tuple[Entry, ...] = (
-    (
-        "Standard error and p from a printed interval",
-        "error = (upper − lower)/(2 z), for a ratio of their logarithms; p from the estimate over the error",
-        "Altman and Bland 2011, BMJ 343:d2304",
-        "With the normal distribution in full. As if the interval reached equally far to both sides.",
-    ),
-    (
-        "Interval from a printed p",
-        "error = estimate/z of the p, of a ratio its logarithm; the interval is estimate ∓ z error",
-        "Altman and Bland 2011, BMJ 343:d2090",
-        "Approximate, and said to be so beside the figure.",
-    ),
-    (
-        "Ratio of two ratios (interaction)",
-        "d = ln R1 − ln R2, error = √(error1² + error2²), each error from its own interval",
-        "Altman and Bland 2003, BMJ 326:219",
-        "Whether two strata tell different ratios.",
-    ),
-)
+PRINT_HEADING = "From printed results"
 
 LETTERS = (
     "a and b: people with and without the event in the index group; c and d: in the reference group. n1 = a + b, "
@@ -117,7 +97,7 @@ def methods_and_sources() -> tuple[Section, ...]:
         (STRATA_TESTS_HEADING, _entries(STRATA_TESTS)),
         (HOMOGENEITY_HEADING, _entries(HOMOGENEITY_TESTS)),
         (EXTRAS_HEADING, _entries(EXTRAS)),
-        (PRINT_HEADING, FROM_PRINT),
+        (PRINT_HEADING, _entries(RECOVERIES)),
         (PRINT_ONLY_HEADING, tuple(map(_named, PRINT_METHODS)) + _entries(PRINT_TESTS)),
     )
 

@@ -8,7 +8,7 @@ from fourcount.record.paper import Choices
 from fourcount.wording import names
 from fourcount.wording.form import given, measure_of
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
-from fourcount.wording.lines.unpaired import relative_note
+from fourcount.wording.lines.unpaired import conversion_text, relative_note
 from fourcount.wording.lines.words import KINDS, method_word
 from fourcount.wording.printed import PER_UNIT, adjusted_words, paper_measure_name
 
@@ -32,5 +32,7 @@ def effect_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) 
     per = PER_UNIT[printed.unit] if key == "rate_difference" else 1
     unit = {"difference": "per 100, ", "rate_difference": f"per {per:,} of person-time, "}.get(KINDS.get(key, ""), "")
     detail = f"{unit}{method_word(measure.method, choices)}{adjusted_words(outcome, printed)}"
-    notes = (FROM_P if rebuilt else "", relative_note(measure) if key in ("risk_ratio", "rate_ratio") else "")
-    return (figure_line(key, name, measure, detail=detail, notes=notes, per=per),)
+    notes = [FROM_P if rebuilt else "", relative_note(measure) if key in ("risk_ratio", "rate_ratio") else ""]
+    if key == "odds_ratio":
+        notes.append(conversion_text(findings.conversion, names.risk_name(outcome)))
+    return (figure_line(key, name, measure, detail=detail, notes=tuple(notes), per=per),)

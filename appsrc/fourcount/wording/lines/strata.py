@@ -16,11 +16,11 @@ from fourcount.appraisal.findings import (
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers
-from fourcount.wording.form import lacking, measure_of
+from fourcount.wording.form import crude, lacking, measure_of
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.text import estimate_text, interval_text
-from fourcount.wording.lines.unpaired import measure_name, relative_note, unpaired_line
+from fourcount.wording.lines.unpaired import conversion_text, measure_name, relative_note, unpaired_line
 from fourcount.wording.lines.words import method_word
 
 ORDER = (
@@ -72,9 +72,11 @@ def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choice
     if isinstance(measure, Gap):
         return withheld_line(key, name, measure)
     if not key.startswith("pooled_") or not isinstance(measure, Figure):
-        return replace(unpaired_line(key, outcome, findings, choices), name=name)
+        return replace(unpaired_line(key, outcome, crude(findings), choices), name=name)
     unit = "per 100, " if key == "pooled_risk_difference" else ""
     relative = relative_note(measure) if key == "pooled_risk_ratio" else ""
+    if key == "pooled_odds_ratio":
+        relative = conversion_text(findings.conversion, names.risk_name(outcome))
     detail = f"{unit}{method_word(measure.method, choices)}"
     return figure_line(key, name, measure, detail=detail, notes=(relative, parting_note(key, findings)))
 

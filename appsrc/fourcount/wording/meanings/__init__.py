@@ -8,6 +8,7 @@ from types import MappingProxyType
 from fourcount.appraisal.findings import Figure, OutcomeFindings
 from fourcount.record.outcome import Form, Outcome
 from fourcount.record.paper import Choices
+from fourcount.wording.form import crude
 from fourcount.wording.meanings import pairs, person_time, printed, strata, unpaired
 from fourcount.wording.meanings.unpaired import number_needed, odds_ratio_claim
 
@@ -61,4 +62,5 @@ def meaning(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFinding
     """What a measure with an estimate says in this table, and what it does not say."""
     if findings.form == "effect-only":
         return printed.effect(key, outcome, figure, findings, choices)
-    return FORMS.get(findings.form, UNPAIRED)[key](outcome, figure, findings, choices)
+    found = crude(findings) if findings.form == "strata" and not key.startswith("pooled_") else findings
+    return FORMS.get(findings.form, UNPAIRED)[key](outcome, figure, found, choices)

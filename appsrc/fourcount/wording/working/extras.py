@@ -6,11 +6,12 @@ from fourcount.appraisal.findings import Clusters, EValues, Fragility, Gap, Loss
 from fourcount.record.paper import Choices
 from fourcount.stats.entries.entry import Calculation
 from fourcount.stats.entries.extras import EXTRAS
+from fourcount.stats.entries.recovery import RECOVERIES
 from fourcount.wording import numbers
 from fourcount.wording.numbers import plain, quantity
 from fourcount.wording.working.parts import Row, about
 
-CALCULATIONS: dict[str, Calculation] = {entry.key: entry for entry in EXTRAS}
+CALCULATIONS: dict[str, Calculation] = {entry.key: entry for entry in (*EXTRAS, *RECOVERIES)}
 ENTRIES = {
     "attributable_exposed": "attributable-exposed",
     "attributable_population": "attributable-population",
@@ -20,10 +21,6 @@ ENTRIES = {
     "losses": "losses",
 }
 CONVERSIONS = {"odds_ratio": "e-value-odds", "hazard_ratio": "e-value-hazards"}
-ERROR_OF_LIMITS = "ln(upper/lower)/(2 z) of the printed limits, z = ln(estimate)/error, p by the normal distribution"
-ERROR_OF_DIFFERENCE = "(upper − lower)/(2 z) of the printed limits, z = estimate/error, p by the normal distribution"
-ERROR_OF_P = "The estimate (of a ratio its logarithm) over the z that belongs to the printed p"
-RECOVERY_SOURCE = "Altman and Bland 2011, BMJ 343:d2090 and d2304, with the normal distribution in full"
 
 
 def extra_rows(key: str, findings: OutcomeFindings, _choices: Choices) -> tuple[Row, ...]:
@@ -40,13 +37,12 @@ def recovered_rows(findings: OutcomeFindings) -> list[Row]:
     found = findings.extras.recovered
     if not isinstance(found, Recovered):
         return []
-    formula = ERROR_OF_P if found.from_p else ERROR_OF_LIMITS if found.log_scale else ERROR_OF_DIFFERENCE
+    entry = CALCULATIONS["recovery-p" if found.from_p else "recovery-limits"]
     return [
         ("Standard error", plain(found.standard_error)),
         ("z", plain(found.z, 2)),
         ("p", numbers.p_value(found.p)),
-        ("Formula", formula),
-        ("Source", RECOVERY_SOURCE),
+        *about(entry),
     ]
 
 

@@ -18,9 +18,10 @@ from fourcount.stats.interaction import Interaction, ratio_of_ratios
 from fourcount.stats.methods import HOMOGENEITY_TESTS, STRATA_TESTS, homogeneity_test, test
 from fourcount.stats.results import HomogeneityTest
 from fourcount.wording import limits, numbers
-from fourcount.wording.form import measure_of
+from fourcount.wording.form import crude, measure_of
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.numbers import plain
+from fourcount.wording.working.extras import CALCULATIONS
 from fourcount.wording.working.parts import (
     ESTIMATE,
     SPACE,
@@ -35,7 +36,6 @@ from fourcount.wording.working.parts import (
 from fourcount.wording.working.unpaired import unpaired_rows
 
 RATIO_OF_RATIOS = "Ratio of the two strata’s ratios"
-INTERACTION_SOURCE = "Altman and Bland 2003, BMJ 326:219: from each one’s interval, on the log scale"
 TWO = 2
 
 
@@ -43,7 +43,7 @@ def strata_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choic
     """A pooled measure's rows; a crude one's are those of the four counts thrown together."""
     strata, found = findings.strata, measure_of(measure, findings)
     if not measure.startswith("pooled_"):
-        return unpaired_rows(measure, outcome, findings, choices)
+        return unpaired_rows(measure, outcome, crude(findings), choices)
     if not isinstance(strata, StrataFindings) or not isinstance(found, Figure):
         return ()
     counts = [stratum.counts for stratum in strata.strata]
@@ -109,7 +109,7 @@ def _interaction(measure: str, strata: tuple[StratumFindings, ...], choices: Cho
         return [SPACE, (RATIO_OF_RATIOS, gap_text(found))]
     interval = limits.ratio_interval(Interval(low=found.low, high=found.high), found.ratio)
     words = f"{numbers.ratio(found.ratio)}{limits.bracketed(interval)}, {numbers.p_phrase(found.p)}"
-    return [SPACE, (RATIO_OF_RATIOS, words), ("Source", INTERACTION_SOURCE)]
+    return [SPACE, (RATIO_OF_RATIOS, words), *about(CALCULATIONS["interaction"])]
 
 
 def _three(figure: Figure) -> tuple[float, float, float] | None:
