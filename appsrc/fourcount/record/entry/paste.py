@@ -2,9 +2,40 @@
 
 from __future__ import annotations
 
+import re
+
+from fourcount.record.entry.block import read_block
+from fourcount.record.entry.pasted.doubts import PASTE_DOUBTS
 from fourcount.record.entry.readings import Pasted
 from fourcount.record.entry.sentence import read_sentence
+from fourcount.record.entry.tokens import LONGEST_TEXT, in_ascii, presentable
+
+__all__ = ["PASTE_DOUBTS", "read_paste"]
+
+_WORD = re.compile(r"[^\W\d_]{2,}")
+_NUMBER = re.compile(r"[0-9]+(?:[.,\u00b7][0-9]+)*")
+_BORDER = re.compile(r"\t|\||[^\s] {3,}[^\s]")
 
 
 def read_paste(text: str) -> Pasted | None:
+    """What a paste was understood as; None where there is no table in it.
+
+    Prose is read as a sentence, anything else as a block first. Never raises, whatever was pasted.
+    """
+    if len(text) > LONGEST_TEXT:
+        return None
+    if not is_prose(text):
+        return read_block(text) or read_sentence(text)
     return read_sentence(text)
+
+
+def is_prose(text: str) -> bool:
+    """Whether a text is running words rather than cells: no borders, and more words than numbers, or one line."""
+    shown = in_ascii(presentable(text)).strip()
+    if _BORDER.search(shown):
+        return False
+    words, numbers = len(_WORD.findall(shown)), len(_NUMBER.findall(shown))
+    if "\n" not in shown:
+        return words >= 3 or ":" in shown
+    lines = shown.split("\n")
+    return words > 2 * numbers and words > 6 * len(lines)

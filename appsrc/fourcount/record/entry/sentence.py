@@ -102,7 +102,13 @@ class SentenceReader:
         end = min(end for end in self.ends if end >= second.after)
         doubts: list[str] = []
         if not (first.complete and second.complete):
-            taken = self.busy | {place for each in quantities if each.events or each.percent for place in range(each.first, each.after) if each not in (first, second) and not bare}
+            taken = self.busy | {
+                place
+                for each in quantities
+                if each.events or each.percent
+                for place in range(each.first, each.after)
+                if each not in (first, second) and not bare
+            }
             first_full, second_full, by_percent = with_totals(self.tokens, first, second, taken, end)
             if first_full.complete and second_full.complete:
                 doubts += ["totals-by-percent"] if by_percent else []
@@ -132,7 +138,13 @@ class SentenceReader:
         return self._compared(first, second, labels, (start, end), strictly=True)
 
     def _compared(
-        self, first: Quantity, second: Quantity, labels: tuple[str, str], bounds: tuple[int, int], *, strictly: bool = False
+        self,
+        first: Quantity,
+        second: Quantity,
+        labels: tuple[str, str],
+        bounds: tuple[int, int],
+        *,
+        strictly: bool = False,
     ) -> bool:
         """Whether anything says that the two are groups of one comparison."""
         between = {token.lower for token in self.tokens[first.after : second.first]}
@@ -154,7 +166,11 @@ class SentenceReader:
         form = _form(pair)
         if any(each.percent and each.events and each.total and not _agrees(each) for each in pair):
             doubts.append("percent-disagrees")
-        others = [each for each in quantities if each.events and each.complete and each.first not in (pair[0].first, pair[1].first)]
+        others = [
+            each
+            for each in quantities
+            if each.events and each.complete and each.first not in (pair[0].first, pair[1].first)
+        ]
         if others and not (pair[0].time and not others[0].time):
             doubts.append("more-counts")
         if self.tokens[pair[0].first - 1].lower == "from" and self.tokens[pair[1].first - 1].lower == "to":
@@ -181,7 +197,10 @@ class SentenceReader:
     def _paper_text(self) -> str:
         """The printed results in one piece, or joined by "; " where other words stand between them."""
         pieces = [self.printed.piece(first, after) for first, after in self.spans]
-        if len(self.spans) > 1 and self.spans[-1][1] - self.spans[0][0] <= sum(b - a for a, b in self.spans) + len(self.spans) * 2:
+        if (
+            len(self.spans) > 1
+            and self.spans[-1][1] - self.spans[0][0] <= sum(b - a for a, b in self.spans) + len(self.spans) * 2
+        ):
             pieces = [self.printed.piece(self.spans[0][0], self.spans[-1][1])]
         return " ".join("; ".join(pieces).split())
 

@@ -79,7 +79,11 @@ def _subject(printed: Print, start: int, after: int) -> str:
     while start < after and (tokens[start].lower in ARTICLES or tokens[start].text in (",", "(")):
         start += 1
     lower = [token.lower for token in tokens[start:after]]
-    if len(lower) > 3 and "of" in lower[:4] and {"rate", "incidence", "proportion", "risk", "frequency"} & set(lower[:3]):
+    if (
+        len(lower) > 3
+        and "of" in lower[:4]
+        and {"rate", "incidence", "proportion", "risk", "frequency"} & set(lower[:3])
+    ):
         start += lower.index("of") + 1
     words = [token for token in tokens[start:after] if token.kind == "word"]
     while after > start and tokens[after - 1].lower in BE | {"also", "more", "less", "often", "frequently"}:
@@ -95,7 +99,11 @@ def _counted_noun(printed: Print, quantity: Quantity) -> str:
     tokens = printed.tokens
     place = quantity.first + 1
     start = place
-    while place < quantity.after and tokens[place].kind == "word" and tokens[place].lower not in INTRODUCERS | {"of", "per", "out", "over", "during"}:
+    while (
+        place < quantity.after
+        and tokens[place].kind == "word"
+        and tokens[place].lower not in INTRODUCERS | {"of", "per", "out", "over", "during"}
+    ):
         place += 1
     noun = printed.piece(start, place)
     return "" if not noun or tokens[place - 1].lower in PEOPLE or quantity.time is None else noun
@@ -111,7 +119,11 @@ def _behind(printed: Print, start: int, end: int) -> str:
         if token.lower in VERBS and token.lower not in _NO_EVENT or (token.lower == "had" and place + 1 < end):
             after = place + 1
             while after < end and after - place < _MOST_WORDS and tokens[after].kind == "word":
-                if tokens[after].lower in COMPARATORS or tokens[after - 1].text.endswith(".") or tokens[after].lower == "and":
+                if (
+                    tokens[after].lower in COMPARATORS
+                    or tokens[after - 1].text.endswith(".")
+                    or tokens[after].lower == "and"
+                ):
                     break
                 after += 1
             while after > place + 1 and tokens[after - 1].lower in ("in", "the", "at", "by", "within", "with", "after"):

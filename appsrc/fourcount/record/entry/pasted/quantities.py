@@ -141,7 +141,12 @@ class Phrases:
         events = self.at(place)
         link = self._nouns(place + 1, 4)
         word = self.at(link)
-        if word.lower in ("in", "during", "over", "per", "for", "across", "from", "/", "with") or word.text in ("(", "[", ",", ";"):
+        if word.lower in ("in", "during", "over", "per", "for", "across", "from", "/", "with") or word.text in (
+            "(",
+            "[",
+            ",",
+            ";",
+        ):
             start = link + 1
             while self.at(start).lower in DETERMINERS or self.at(start).lower in ("of", "for", "in", "during", "over"):
                 start += 1
@@ -230,7 +235,9 @@ class Phrases:
             place += 1
         return None
 
-    def _percent(self, place: int, events: Token, total: Token | None, back: int | None = None) -> tuple[Token | None, int]:
+    def _percent(
+        self, place: int, events: Token, total: Token | None, back: int | None = None
+    ) -> tuple[Token | None, int]:
         """A percentage in brackets or behind a comma, and the place after it; without one, the place to go on from."""
         back = place if back is None else back
         token, inside = self.at(place), self.at(place + 1)

@@ -43,13 +43,12 @@ def shared_total(tokens: Sequence[Token], first: Quantity, second: Quantity, tak
     if first.percent is None or second.percent is None or first.events is None or second.events is None:
         return False
     return any(
-        _fits(first, candidate) and _fits(second, candidate) for candidate in _candidates(tokens, taken, (first, second))
+        _fits(first, candidate) and _fits(second, candidate)
+        for candidate in _candidates(tokens, taken, (first, second))
     )
 
 
-def _candidates(
-    tokens: Sequence[Token], taken: frozenset[int], quantities: Sequence[Quantity]
-) -> list[Candidate]:
+def _candidates(tokens: Sequence[Token], taken: frozenset[int], quantities: Sequence[Quantity]) -> list[Candidate]:
     inside = {place for quantity in quantities for place in range(quantity.first, quantity.after)}
     found = []
     for place, token in enumerate(tokens):
@@ -89,12 +88,12 @@ def _ways(
             yield ((None, one) if own_first else (one, None)), False
         return
     for group in (behind, before[::-1], after):
-        yield from ((pair, group is behind) for pair in _neighbours(group, backwards=group and group[0].place < first.first))
+        yield from (
+            (pair, group is behind) for pair in _neighbours(group, backwards=group and group[0].place < first.first)
+        )
 
 
-def _neighbours(
-    group: Sequence[Candidate], backwards: object
-) -> Iterator[tuple[Candidate, Candidate]]:
+def _neighbours(group: Sequence[Candidate], backwards: object) -> Iterator[tuple[Candidate, Candidate]]:
     for one, two in zip(group, group[1:], strict=False):
         yield (two, one) if backwards else (one, two)
 

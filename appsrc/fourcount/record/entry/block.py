@@ -1,0 +1,155 @@
+"""A pasted block, out of a spreadsheet or a PDF, as a table."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+
+import msgspec
+
+from fourcount.record.entry.pasted.columns import with_percentages, without_results
+from fourcount.record.entry.pasted.grid import read_grid
+from fourcount.record.entry.pasted.groups import Understood, agrees, two_groups
+from fourcount.record.entry.pasted.headings import is_sum
+from fourcount.record.entry.pasted.matrix import Matrix, matrix_of
+from fourcount.record.entry.pasted.pair_table import pair_table
+from fourcount.record.entry.pasted.quantities import Quantity
+from fourcount.record.entry.pasted.strata_rows import Strata, strata_of
+from fourcount.record.entry.printed import read_paper
+from fourcount.record.entry.readings import Pasted, PastedGroup
+from fourcount.record.entry.tokens import LONGEST_TEXT
+from fourcount.record.outcome import Layout
+
+_MOST_STRATA = 50
+
+
+def read_block(text: str) -> Pasted | None:
+    """What a block of cells holds: two groups down or across, pairs, or strata; None where it holds no table.
+
+    Columns of results and of percentages are told from the counts, rows and columns of sums are left out, and what
+    might be understood otherwise is listed.
+    """
+    if len(text) > LONGEST_TEXT or not any(character.isdecimal() for character in text):
+        return None
+    grid = read_grid(text)
+    whole = matrix_of(grid) if grid else None
+    if grid is None or whole is None:
+        return None
+    matrix = with_percentages(without_results(whole))
+    found = _understood(matrix, text)
+    if found is None:
+        return None
+    doubts = dict.fromkeys((*found.ambiguous, *(("comma-pairs",) if grid.comma_pairs else ())))
+    paper = "; ".join(" ".join(piece.split()) for piece in matrix.results)
+    figures = read_paper(paper, "risk_ratio").figures if paper else ()
+    return msgspec.structs.replace(
+        found, ambiguous=tuple(doubts), figures=figures, paper_text=paper if figures else "", source="block"
+    )
+
+
+def _understood(matrix: Matrix, text: str) -> Pasted | None:
+    small, left_out = _without_sums(matrix)
+    pairs = pair_table(small, text)
+    if pairs:
+        return pairs
+    strata = strata_of(matrix)
+    if strata and len(strata.tables) > 1:
+        return _strata(strata)
+    if strata:
+        return _table(strata.tables[0], strata.doubts, "across")
+    down = _down(matrix)
+    across = _down(matrix.turned())
+    layouts: list[tuple[Understood, Layout]] = [(down, "down")] if down else []
+    layouts += [(across, "across")] if across else []
+    if not layouts:
+        return None
+    best, layout = max(layouts, key=lambda found: found[0].score)
+    undecided = down and across and down.score == across.score and _counts(down) != _counts(across)
+    doubts = (*best.doubts, *(("orientation",) if undecided else ()))
+    return _table(best, doubts, layout)
+
+
+def _without_sums(matrix: Matrix) -> tuple[Matrix, bool]:
+    rows = [row for row, label in enumerate(matrix.labels) if not is_sum(label.label)]
+    columns = [place for place, head in enumerate(matrix.heads) if not is_sum(head.label)]
+    return matrix.only(rows, columns), len(rows) < len(matrix.labels) or len(columns) < len(matrix.heads)
+
+
+def _down(matrix: Matrix) -> Understood | None:
+    """The rows as groups, without those of sums; without labels, a last row that is the sum of the others is one."""
+    rows = [row for row, label in enumerate(matrix.labels) if not is_sum(label.label)]
+    if len(rows) == len(matrix.labels) == 3 and _is_sum_row(matrix):
+        rows = [0, 1]
+    if len(rows) != 2:
+        return None
+    found = two_groups(matrix.only(rows))
+    if found and len(rows) < len(matrix.labels):
+        doubts = tuple(dict.fromkeys((*found.doubts, "total-left-out")))
+        return msgspec.structs.replace(found, doubts=doubts)
+    return found
+
+
+def _is_sum_row(matrix: Matrix) -> bool:
+    """Whether the third row's counts are the sums of the first two, and nothing names it as a group."""
+    counts = [[cell.count for cell in row] for row in matrix.rows]
+    values = [[token.whole or 0 if token else None for token in row] for row in counts]
+    pairs = [column for column in zip(*values, strict=True) if None not in column]
+    return bool(pairs) and all((one or 0) + (two or 0) == three for one, two, three in pairs)
+
+
+def _counts(found: Understood) -> tuple[int | None, ...]:
+    parts = [each.events or each.percent for each in found.quantities]
+    wholes = [each.total or each.time for each in found.quantities]
+    return tuple(token.whole if token else None for token in (*parts, *wholes, *found.others))
+
+
+def _table(found: Understood, doubts: Sequence[str], layout: Layout) -> Pasted:
+    return Pasted(
+        form=found.form,
+        groups=_groups(found),
+        left_heading=_heading(found.left_heading),
+        right_heading=_heading(found.right_heading),
+        unit=found.unit,
+        layout=layout,
+        ambiguous=tuple(dict.fromkeys(doubts)),
+    )
+
+
+def _heading(text: str) -> str:
+    """A heading without what only says how its cells are printed."""
+    for ending in ("n (%)", "no. (%)", "No. (%)", "N (%)", "n/N (%)", "n/N", "(%)", "(n)", "(n/N)"):
+        text = text.removesuffix(ending).rstrip(" ,-:\u2013\u2014")
+    return text
+
+
+def _strata(found: Strata) -> Pasted:
+    tables = found.tables[:_MOST_STRATA]
+    return Pasted(
+        form="strata",
+        groups=tuple(group for table in tables for group in _groups(table)),
+        stratum_labels=found.labels[:_MOST_STRATA],
+        ambiguous=found.doubts,
+        strata_of_total=tables[0].form != "events-and-others",
+        layout="across",
+    )
+
+
+def _groups(found: Understood) -> tuple[PastedGroup, ...]:
+    groups = []
+    for place, (quantity, label) in enumerate(zip(found.quantities, found.labels, strict=True)):
+        part = quantity.events or quantity.percent
+        left = part.text if part else ""
+        if quantity.events is None:
+            left += "%"
+        elif quantity.percent is not None and not agrees(quantity, found):
+            left += f" ({quantity.percent.text}%)"
+        groups.append(PastedGroup(left_text=left, right_text=_right(quantity, found, place), label=label))
+    return tuple(groups)
+
+
+def _right(quantity: Quantity, found: Understood, place: int) -> str:
+    if quantity.low and quantity.high:
+        return f"{quantity.low.text} to {quantity.high.text}%"
+    if found.others:
+        return found.others[place].text
+    whole = quantity.time or quantity.total
+    return whole.text if whole else ""

@@ -1,0 +1,204 @@
+"""One cell of a pasted block: a label, a count, a percentage, a result, or nothing."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+
+import msgspec
+
+from fourcount.record.entry.pasted.quantities import CLOSING, OPENING, Phrases, Quantity
+from fourcount.record.entry.pasted.vocabulary import time_of_people
+from fourcount.record.entry.tokens import Print, Token, as_sentence, take_apart
+
+_BLANKS = frozenset(("-", "--", "---", "\u00b7", "...", "..", ".", "na", "n/a", "nr", "ns", "none", "reference", "ref"))
+_NOT_A_LABEL = frozenset(("of", "out", "in", "per", "to", "n", "p", "ci", "and", "or", "percent", "the"))
+
+
+class Cell(msgspec.Struct, frozen=True, kw_only=True):
+    """What stands in one cell. ``total`` is from "(n = 412)"; ``result`` is a printed effect or p as text."""
+
+    text: str = ""
+    label: str = ""
+    total: Token | None = None
+    quantity: Quantity | None = None
+    decimal: Token | None = None
+    result: str = ""
+
+    @property
+    def filled(self) -> bool:
+        """Whether it holds a number of the table's body."""
+        return self.quantity is not None or self.decimal is not None or bool(self.result)
+
+    @property
+    def empty(self) -> bool:
+        return not (self.label or self.filled or self.total)
+
+    @property
+    def count(self) -> Token | None:
+        """A whole number with nothing but a percentage beside it."""
+        quantity = self.quantity
+        return quantity.events if quantity and not quantity.complete else None
+
+    @property
+    def percent(self) -> Token | None:
+        """A percentage that stands alone, or a number with decimals that may be one."""
+        if self.quantity and self.quantity.events is None and not self.quantity.complete:
+            return self.quantity.percent
+        return self.decimal if self.decimal and 0 <= self.decimal.value <= 100 else None
+
+
+def delimited_cell(text: str) -> list[Cell]:
+    """The cells in what stands between two borders: mostly one; several where spaces part numbers within it."""
+    text = text.strip(" \u00a0\t\"'*")
+    printed = take_apart(text)
+    tokens = printed.tokens
+    if not tokens or text.casefold().strip() in _BLANKS or not any(_tells(token) for token in tokens):
+        return [Cell(text=text)]
+    if tokens[0].kind == "word" and tokens[0].lower not in ("n", "p") and not _value_behind_colon(tokens):
+        return [_label(printed, 0, len(tokens))]
+    return _cells(as_sentence(printed))
+
+
+def _tells(token: Token) -> bool:
+    return token.kind != "mark" or token.text in ("%", "+", "\u2713")
+
+
+def _value_behind_colon(tokens: Sequence[Token]) -> bool:
+    places = [place for place, token in enumerate(tokens[:-1]) if token.text == ":"]
+    return any(tokens[place + 1].kind == "number" for place in places)
+
+
+def row_cells(text: str) -> list[Cell]:
+    """The cells of a line without borders: its label, then each number with what belongs to it."""
+    return _cells(take_apart(text))
+
+
+def _cells(printed: Print) -> list[Cell]:
+    tokens = printed.tokens
+    start = _body(tokens)
+    found = _labels(printed, start) if start else []
+    phrases = Phrases(tokens, bare=True)
+    place = start
+    while place < len(tokens):
+        cell, after = _cell_at(printed, phrases, place)
+        if cell:
+            found.append(cell)
+        place = after
+    return found
+
+
+def _body(tokens: Sequence[Token]) -> int:
+    """The place at which the numbers of a line begin: behind the last word that can only be of its label."""
+    start = 0
+    for place, token in enumerate(tokens):
+        if token.kind != "word" or token.lower in _NOT_A_LABEL or "value" in token.lower:
+            continue
+        before = tokens[place - 1] if place else token
+        unit = time_of_people(token.lower, tokens[place + 1].lower if place + 1 < len(tokens) else "")
+        unit = unit or (place and time_of_people(before.lower, token.lower))
+        if not (unit and any(each.kind == "number" for each in tokens[max(0, place - 2) : place])):
+            start = place + 1
+    while start < len(tokens) and tokens[start].text in (":", "=", ",", ")", "]", "|", "+", "-"):
+        if tokens[start].text == "=" and tokens[start - 1].lower == "n":
+            break
+        start += 1
+    return _past_total(tokens, start)
+
+
+def _past_total(tokens: Sequence[Token], start: int) -> int:
+    """The place behind "(n = 412)" that follows a label at once."""
+    place = start + (start < len(tokens) and tokens[start].text in OPENING)
+    if start and place + 2 < len(tokens) and tokens[place].lower == "n" and tokens[place + 1].text == "=":
+        place += 3
+        while place < len(tokens) and tokens[place].text in (*CLOSING, ":"):
+            place += 1
+        return place
+    return start
+
+
+def _labels(printed: Print, after: int) -> list[Cell]:
+    """The labels before a place; one that ends in "(n = 412)" ends there."""
+    found = []
+    start = 0
+    for place in range(after):
+        if printed.tokens[place].text in CLOSING and _total(printed.tokens[start : place + 1]):
+            found.append(_label(printed, start, place + 1))
+            start = place + 1
+    if start < after:
+        found.append(_label(printed, start, after))
+    return [cell for cell in found if cell.label or cell.total]
+
+
+def _label(printed: Print, start: int, after: int) -> Cell:
+    text = printed.piece(start, after)
+    tokens = printed.tokens[start:after]
+    total = _total(tokens)
+    if total:
+        marks = [token.start for token in tokens if token.lower == "n" and token.end <= total.start]
+        text = printed.shown[tokens[0].start : marks[-1]] if marks else text
+    return Cell(text=text, label=" ".join(text.strip(" :=,;([|*\u2020\u00a0\n").split()), total=total)
+
+
+def _total(tokens: Sequence[Token]) -> Token | None:
+    """The number in "n = 412", or a number of people in brackets ("(412 patients)")."""
+    for place in range(len(tokens) - 1):
+        if tokens[place].lower == "n" and tokens[place + 1].text in ("=", ":"):
+            number = tokens[place + 2] if place + 2 < len(tokens) else tokens[place]
+            return number if number.whole else None
+        if tokens[place].lower == "n" and tokens[place + 1].whole:
+            return tokens[place + 1]
+    return None
+
+
+def _cell_at(printed: Print, phrases: Phrases, place: int) -> tuple[Cell | None, int]:
+    """The cell that begins at a token, and the place after it."""
+    tokens = printed.tokens
+    token = tokens[place]
+    if token.lower == "n" or (token.text in OPENING and phrases.at(place + 1).lower == "n"):
+        start = place if token.lower == "n" else place + 1
+        total = _total(tokens[start : start + 3])
+        if total:
+            after = start + 3
+            return Cell(text=printed.piece(place, after), total=total), after
+    if token.lower == "p" or token.text in ("<", ">"):
+        return _p(printed, place)
+    if token.kind != "number":
+        return None, place + 1
+    result = _result(printed, phrases, place)
+    if result:
+        return result
+    if token.whole is None and not token.percent:
+        return Cell(text=token.text, decimal=token), place + 1
+    time = time_of_people(phrases.at(place + 1).lower, phrases.at(place + 2).lower)
+    quantity = phrases.quantity_at(place)
+    if quantity is None:
+        return None, place + 1
+    if time and not quantity.complete:
+        unit = " ".join(each.text.rstrip(".") for each in tokens[place + 1 : place + 1 + time])
+        timed = Quantity(first=place, after=place + 1, events=token, unit=unit)
+        return Cell(text=token.text, quantity=timed), place + 1 + time
+    return Cell(text=printed.piece(place, quantity.after), quantity=quantity), max(quantity.after, place + 1)
+
+
+def _p(printed: Print, place: int) -> tuple[Cell | None, int]:
+    for step in range(place, min(place + 4, len(printed.tokens))):
+        if printed.tokens[step].kind == "number":
+            text = printed.piece(place, step + 1)
+            return Cell(text=text, result=text if text[:1] in "pP" else f"P {text}"), step + 1
+    return None, place + 1
+
+
+def _result(printed: Print, phrases: Phrases, place: int) -> tuple[Cell, int] | None:
+    """``0.55 (0.30-0.99)``: an estimate with two limits that have decimals."""
+    token = printed.tokens[place]
+    opened = phrases.at(place + 1).text in OPENING
+    if token.percent and token.value >= 0:
+        return None
+    at = place + 2 if opened else place + 1
+    low, between, high = phrases.at(at), phrases.at(at + 1), phrases.at(at + 2)
+    limits = opened and low.kind == high.kind == "number" and between.lower in ("to", "-", ",", ";")
+    if not limits or (token.whole is not None and not (low.decimals or high.decimals)):
+        return None
+    after = at + 3 + (phrases.at(at + 3).text in CLOSING)
+    text = printed.piece(place, after)
+    return Cell(text=text, result=text), after

@@ -1,0 +1,142 @@
+"""Columns of a block that stand beside its counts: printed results and percentages."""
+
+from __future__ import annotations
+
+import re
+from collections.abc import Sequence
+
+import msgspec
+
+from fourcount.record.entry.pasted.cells import Cell
+from fourcount.record.entry.pasted.headings import Role, role_of
+from fourcount.record.entry.pasted.matrix import Head, Matrix
+from fourcount.record.entry.pasted.quantities import Quantity, gives
+from fourcount.record.entry.tokens import Token
+
+_INTERVAL = re.compile(r"[(\[,; ]*([0-9.]+ ?% ?-?(?:CI|CrI|confidence interval)s?)[)\] ]*", re.IGNORECASE)
+_BRACKET = re.compile(r"[(\[]")
+
+
+def without_results(matrix: Matrix) -> Matrix:
+    """The matrix without its columns and rows of effects and p values, whose text goes to ``results``."""
+    columns = [place for place in range(len(matrix.heads)) if not _is_result(matrix, place)]
+    turned = matrix.turned()
+    rows = [place for place in range(len(matrix.labels)) if not _is_result(turned, place)]
+    if not columns or not rows:
+        return matrix
+    texts = list(matrix.results)
+    texts += _texts(matrix, [place for place in range(len(matrix.heads)) if place not in columns])
+    texts += _texts(turned, [place for place in range(len(matrix.labels)) if place not in rows])
+    return msgspec.structs.replace(matrix.only(rows, columns), results=tuple(texts))
+
+
+def _is_result(matrix: Matrix, column: int) -> bool:
+    role: Role = role_of(matrix.heads[column].label)
+    filled = [row[column] for row in matrix.rows if row[column].filled]
+    if not filled:
+        return True
+    plain = any(cell.quantity and (cell.quantity.total or cell.count) for cell in filled)
+    return all(cell.result for cell in filled) or (role in ("result", "p", "rate") and not (plain and role != "rate"))
+
+
+def _texts(matrix: Matrix, columns: Sequence[int]) -> list[str]:
+    """Each result with its name from the heading: "RR (95% CI)" over "0.55 (0.30-0.99)" gives "RR 0.55 (95% CI ...".
+
+    A column of rates is not a result of the comparison and gives none.
+    """
+    found = []
+    for column in columns:
+        head = matrix.heads[column].label
+        role = role_of(head)
+        cells = [row[column] for row in matrix.rows if row[column].filled]
+        if role == "rate" or not cells:
+            continue
+        found.append(_named(head, role, cells[0]))
+    return found
+
+
+def _named(head: str, role: Role, cell: Cell) -> str:
+    text = cell.result or cell.text
+    if role == "p" or text.startswith("P "):
+        number = text.removeprefix("P ").removeprefix("p ").strip()
+        return f"P {number}" if number[:1] in "<>=" else (number if number[:1] in "pP" else f"P = {number}")
+    interval = _INTERVAL.search(head)
+    name = _INTERVAL.sub(" ", head).strip(" ,;:")
+    if interval:
+        text = _BRACKET.sub(lambda match: f"{match[0]}{interval[1]} ", text, count=1)
+    return f"{name} {text}".strip()
+
+
+def with_percentages(matrix: Matrix) -> Matrix:
+    """The matrix with columns of percentages put beside the counts that they are of."""
+    rows = [list(row) for row in matrix.rows]
+    gone: list[int] = []
+    for column in range(1, len(matrix.heads)):
+        percents = [_percent(row[column], matrix.heads[column]) for row in rows]
+        told = [percent for percent in percents if percent]
+        if not told or any(row[column].filled and not percent for row, percent in zip(rows, percents, strict=True)):
+            continue
+        target = _target(rows, percents, matrix.heads, [place for place in range(column) if place not in gone])
+        if target is None:
+            continue
+        for row, percent in zip(rows, percents, strict=True):
+            quantity = row[target].quantity
+            if quantity and percent and quantity.percent is None:
+                row[target] = msgspec.structs.replace(
+                    row[target], quantity=msgspec.structs.replace(quantity, percent=percent)
+                )
+        gone.append(column)
+    kept = [place for place in range(len(matrix.heads)) if place not in gone]
+    whole = msgspec.structs.replace(matrix, rows=tuple(tuple(row) for row in rows))
+    return msgspec.structs.replace(whole.only(range(len(rows)), kept), rows=_decimals_as_percents(rows, kept))
+
+
+def _decimals_as_percents(rows: Sequence[Sequence[Cell]], kept: Sequence[int]) -> tuple[tuple[Cell, ...], ...]:
+    """Numbers with decimals that stand alone as percentages, which is all that they can be beside totals."""
+    return tuple(tuple(_as_percent(row[column]) for column in kept) for row in rows)
+
+
+def _as_percent(cell: Cell) -> Cell:
+    if cell.quantity or cell.decimal is None:
+        return cell
+    return msgspec.structs.replace(cell, quantity=Quantity(first=0, after=1, percent=cell.decimal))
+
+
+def _percent(cell: Cell, head: Head) -> Token | None:
+    if cell.percent:
+        return cell.percent
+    count = cell.count
+    whole = count is not None and (count.whole or 0) <= 100 and role_of(head.label) == "percent"
+    return count if whole and cell.quantity and cell.quantity.percent is None else None
+
+
+def _target(
+    rows: Sequence[Sequence[Cell]], percents: Sequence[Token | None], heads: Sequence[Head], left: Sequence[int]
+) -> int | None:
+    """The column of counts, or of counts with their totals, that a column of percentages is of."""
+    if not left:
+        return None
+    last = left[-1]
+    complete = [row[last].quantity for row in rows if row[last].filled]
+    if complete and all(quantity and quantity.events and quantity.total for quantity in complete):
+        return last
+    if len(left) > 1 and _fits(rows, percents, left[-2], last):
+        return left[-2]
+    if role_of(heads[last].label) == "total" and len(left) > 1:
+        return left[-2]
+    counted = all(row[last].count for row in rows if row[last].filled)
+    return last if counted and role_of(heads[last].label) != "total" else None
+
+
+def _fits(rows: Sequence[Sequence[Cell]], percents: Sequence[Token | None], part: int, whole: int) -> bool:
+    """Whether every percentage is what the part gives of the whole, or of both together."""
+    for row, percent in zip(rows, percents, strict=True):
+        events, total = row[part].count, row[whole].count
+        if percent is None:
+            continue
+        if events is None or total is None or events.whole is None or total.whole is None:
+            return False
+        of_total = events.whole <= total.whole and gives(percent, events.whole, total.whole)
+        if not (of_total or gives(percent, events.whole, events.whole + total.whole)):
+            return False
+    return True

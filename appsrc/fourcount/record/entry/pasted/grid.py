@@ -1,0 +1,83 @@
+"""A pasted block as rows of cells, wherever it came from: a spreadsheet, a PDF, a page."""
+
+from __future__ import annotations
+
+import re
+from collections.abc import Callable, Sequence
+
+import msgspec
+
+from fourcount.record.entry.pasted.cells import Cell, delimited_cell, row_cells
+from fourcount.record.entry.tokens import presentable
+
+MOST_ROWS = 60
+MOST_COLUMNS = 24
+_RULE = re.compile(r"[\s|+:=_-]*")
+_GAP = re.compile(r"[ \u00a0]{2,}| \| ?")
+_PAIR = re.compile(r"[0-9]{1,3},[0-9]{3}")
+_COMMA_IN_NUMBER = re.compile(r"[0-9],[0-9]{3}(?![0-9])")
+
+
+class Grid(msgspec.Struct, frozen=True):
+    """Rows of cells, and whether a comma had to be taken as a border inside what might be one number."""
+
+    rows: tuple[tuple[Cell, ...], ...]
+    comma_pairs: bool = False
+
+
+def read_grid(text: str) -> Grid | None:
+    """The rows of a text; None where it has too many to be one table."""
+    lines = [line for line in presentable(text).split("\n") if not _RULE.fullmatch(line)]
+    if not lines or len(lines) > MOST_ROWS:
+        return None
+    split, comma_pairs = _splitter(lines)
+    rows = []
+    for line in lines:
+        pieces = split(line)
+        if len(pieces) > MOST_COLUMNS:
+            return None
+        cells = row_cells(line) if len(pieces) == 1 else [cell for piece in pieces for cell in delimited_cell(piece)]
+        rows.append(tuple(cells[:MOST_COLUMNS]))
+    return Grid(tuple(rows), comma_pairs)
+
+
+def _splitter(lines: Sequence[str]) -> tuple[Callable[[str], list[str]], bool]:
+    """How the lines are parted into cells: by the first border that parts them as a table would be."""
+    if any("\t" in line.strip() for line in lines):
+        return (lambda line: line.strip("\n ").split("\t")), False
+    if all(line.count("|") >= 1 for line in lines):
+        return (lambda line: line.strip().strip("|").split("|")), False
+    if all(";" in _outside_brackets(line) for line in lines):
+        return (lambda line: _split_outside(line, ";")), False
+    gaps = [len(_GAP.findall(line.strip())) for line in lines]
+    if sum(gap > 0 for gap in gaps) * 2 > len(lines):
+        return (lambda line: _GAP.split(line.strip())), False
+    if all(_PAIR.fullmatch(line.strip()) for line in lines) and len(lines) == 2:
+        return (lambda line: line.strip().split(",")), True
+    if _comma_parts(lines):
+        return (lambda line: _split_outside(line, ",")), any(_COMMA_IN_NUMBER.search(line) for line in lines)
+    return (lambda line: [line]), False
+
+
+def _comma_parts(lines: Sequence[str]) -> bool:
+    """Whether commas part every line into equally many cells, at least two of them."""
+    numbers = {len(_split_outside(line, ",")) for line in lines}
+    if len(numbers) != 1 or min(numbers) < 2:
+        return False
+    return all(len(_COMMA_IN_NUMBER.findall(line)) < line.count(",") or line.count(",") > 2 for line in lines)
+
+
+def _outside_brackets(line: str) -> str:
+    return re.sub(r"\([^()]*\)|\[[^\[\]]*\]", "", line)
+
+
+def _split_outside(line: str, border: str) -> list[str]:
+    """The line parted at a border outside brackets and quotation marks."""
+    pieces, depth, quoted, start = [], 0, False, 0
+    for place, character in enumerate(line):
+        depth += (character in "([") - (character in ")]")
+        quoted ^= character == '"'
+        if character == border and depth <= 0 and not quoted:
+            pieces.append(line[start:place])
+            start = place + 1
+    return [*pieces, line[start:]]
