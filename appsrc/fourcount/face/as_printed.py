@@ -15,9 +15,9 @@ from fourcount.face.grid import Grid
 from fourcount.face.grid_forms import GRID_FORMS
 from fourcount.face.links import Link
 from fourcount.face.look import Look
-from fourcount.face.rare_parts import RareParts
+from fourcount.face.rare_parts import RareParts, TabStops
 from fourcount.face.text import Words
-from fourcount.record.outcome import CELLS, Outcome, form_of
+from fourcount.record.outcome import CELLS, Form, Outcome, form_of
 from fourcount.record.paper import Choices
 from fourcount.wording import labels
 
@@ -27,6 +27,10 @@ if TYPE_CHECKING:
 LINKS = ("swap", "count-other", "clear", "paste")
 LONG_SPECIMENS = ("person-time", "risk-at-time", "effect-only")
 """Forms whose specimen needs a line of its own; which way groups run then stands under it."""
+
+
+LINKLESS: dict[Form, tuple[str, ...]] = {"effect-only": ("swap", "count-other"), "person-time": ("count-other",)}
+"""Commands that do nothing in a form."""
 
 
 class AsPrinted(FieldsView):
@@ -53,11 +57,11 @@ class AsPrinted(FieldsView):
         self.grid = Grid(look)
         self.notes = Words(look, "small", "caution")
         self.example = Link(look, labels.FIRST_STEP)
-        self.links = [
-            Link(look, labels.LINK_WORDS[key], actions[key], labels.LINK_NAMES.get(key, "")) for key in LINKS
-        ]
+        self.links = [Link(look, labels.LINK_WORDS[key], actions[key], labels.LINK_NAMES.get(key, "")) for key in LINKS]
         self._build()
-        self.rare = RareParts(self, look, actions, self._column, self._form_rows)
+        stops = TabStops(self.layout_choice, self.grid.cells[CELLS[3]], self.example)
+        self.rare = RareParts(look, actions, self._column, self._printed_row, stops)
+        self.rare.setParent(self)
         self._pass_on(self.rare)
         self._connect_all()
 
@@ -83,15 +87,17 @@ class AsPrinted(FieldsView):
         self.layout_choice.show_choice(outcome.layout)
         self.layout_choice.setVisible(form in GRID_FORMS and form != "pairs")
         self._place_layout_choice(form in LONG_SPECIMENS)
+        for key, link in zip(LINKS, self.links, strict=True):
+            link.setVisible(key not in LINKLESS.get(form, ()))
         self.grid.setVisible(form in GRID_FORMS)
         self.grid.show_state(outcome, findings)
         self.example.setVisible(outcome == Outcome())
-        self.rare.show_state(outcome, findings, self._names["left_words_text"].width())
+        self.rare.show_state(outcome, findings, self._width_of_names())
         self._show_marks(findings)
 
     def show_check(self, outcome: Outcome, check: CheckFindings | None, choices: Choices) -> None:
         """Show what the paper says and whether it adds up."""
-        self.rare.show_check(outcome, check, choices, self._names["left_words_text"].width())
+        self.rare.show_check(outcome, check, choices, self._width_of_names())
 
     def field_named(self, key: str) -> TextField | None:
         """The field of this column with a key, its row opened where it has one."""
@@ -105,7 +111,10 @@ class AsPrinted(FieldsView):
 
     def paper_field(self, outcome: Outcome, choices: Choices) -> TextField:
         """The field of what the paper says, made if it is not there yet."""
-        return self.rare.paper_field(outcome, choices, self._names["left_words_text"].width())
+        return self.rare.paper_field(outcome, choices, self._width_of_names())
+
+    def _width_of_names(self) -> int:
+        return max(words.sizeHint().width() for words in self._names.values())
 
     def _event_hint(self, outcome: Outcome) -> str:
         """What the event is called while nothing is typed: that it is not the other one, where that is named."""

@@ -62,6 +62,6 @@ def copy_picture(session: Session, picture: Picture | None, style: Style) -> boo
 
 
 def _whole(session: Session) -> bool:
-    from fourcount.appraisal.findings import Counts
+    from fourcount.wording.form import lacking
 
-    return session.findings is not None and isinstance(session.findings.counts, Counts)
+    return session.findings is not None and lacking(session.findings) is None

@@ -53,6 +53,8 @@ class Grid(FieldsView):
         self.total_heading = self._small()
         self.total_heading.setText(labels.TOTAL)
         self.totals = {key: self._small(RIGHT) for key in ("first", "second", "left", "right", "everyone")}
+        for widget in self._widgets():
+            widget.setParent(self)  # a form may leave some out
         self._layout = QGridLayout(self)
         self._layout.setContentsMargins(0, 0, 0, 0)
         self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
@@ -92,13 +94,14 @@ class Grid(FieldsView):
         """The small line under a cell."""
         if field not in self.notes:
             self.notes[field] = self._small(RIGHT)
+            self.notes[field].setContentsMargins(0, 0, 0, 4)
             self._dress()
         return self.notes[field]
 
     def row_head(self, column: str) -> QLabel:
         """The name of a row that repeats the heading of a column, as a table of pairs has it."""
         if column not in self.row_heads:
-            self.row_heads[column] = self._small()
+            self.row_heads[column] = self._small(Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter)
             self._dress()
         return self.row_heads[column]
 
@@ -175,6 +178,9 @@ class Grid(FieldsView):
         self._set_alignment(layout)
         for widget in self._widgets():
             widget.setVisible(self._layout.indexOf(widget) >= 0)
+        for made in self._rare.values():
+            if self._layout.indexOf(made) >= 0:
+                self.setTabOrder(self.headings["right"], made)
         before: QWidget = self.labels["second"]
         for field in self._reading_order():
             self.setTabOrder(before, self.cells[field])
@@ -213,10 +219,10 @@ class Grid(FieldsView):
     def _rare_field(self, field: str) -> TextField:
         if field not in self._rare:
             made = QuietField(self._look, field, labels.FIELDS[field], labels.HINTS[field], role="small")
+            made.setParent(self)
             made.setAlignment(Qt.AlignmentFlag.AlignRight)
             self._pass_on(made)
             self._rare[field] = made
-            self.setTabOrder(self.headings["right"], made)
         return self._rare[field]
 
     def _widgets(self) -> tuple[QWidget, ...]:

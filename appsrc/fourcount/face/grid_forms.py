@@ -36,14 +36,14 @@ OF_TOTAL = GridForm(
     heads=("left", "total", "right"),
     sides=("first_right", "second_right"),
     feet=("left", "everyone", "right"),
-    stretches=(6, 5, 5, 4),
+    stretches=(5, 5, 5, 5),
     names=("left", "right"),
     known=("first", "second"),
 )
 GRID_FORMS: dict[Form, GridForm] = {
     "events-and-others": COUNTS,
     "events-of-total": OF_TOTAL,
-    "percent-of-total": OF_TOTAL._replace(names=("percent", "right")),
+    "percent-of-total": OF_TOTAL._replace(stretches=(4, 6, 5, 5), names=("percent", "right")),
     "pairs": COUNTS._replace(names=("pairs", "pairs"), known=("", "")),
     "person-time": GridForm(
         heads=("left", "unit", ""),

@@ -4,17 +4,28 @@ from __future__ import annotations
 
 from typing import NamedTuple
 
-from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
+from fourcount.appraisal.findings import (
+    AnyNumberNeeded,
+    Figure,
+    Gap,
+    OutcomeFindings,
+    PatientFindings,
+    StrataFindings,
+)
 from fourcount.ink.picture import KeyEntry, Picture, PictureWords, Side
 from fourcount.picture.plan import Plan, plan
 from fourcount.picture.scales import risk_scale
-from fourcount.record.outcome import Effect, Outcome
+from fourcount.record.outcome import COUNTED_FORMS, FORMS, Effect, Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import labels, numbers
 from fourcount.wording.axis import axis_words
+from fourcount.wording.form import lacking
 from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.names import effect_name, sentence_case
 from fourcount.wording.patient import WHICH_PEOPLE, PatientWords, patient_words
+
+WAITS = {form: labels.PATIENT_WAITS_OTHERWISE for form in FORMS if form not in COUNTED_FORMS}
+"""What the column says while the table is not whole, where that is not four counts."""
 
 
 class PatientView(NamedTuple):
@@ -38,14 +49,14 @@ def patient_view(outcome: Outcome, findings: OutcomeFindings, choices: Choices, 
     marks = {mark.field: mark_text(mark) for mark in findings.marks}
     view = PatientView(
         baseline_hint=_baseline_hint(outcome, findings),
-        own_risk=outcome.design != "case-control",
-        effect="odds_ratio" if outcome.design == "case-control" else outcome.patient.effect,
+        own_risk=outcome.design != "case-control" and findings.form in COUNTED_FORMS,
+        effect=_effect(outcome, findings),
         effect_words=_effect_words(outcome, findings),
-        effect_is_free=outcome.design != "case-control",
+        effect_is_free=outcome.design != "case-control" and findings.form in (*COUNTED_FORMS, "strata"),
         mark=marks.get("starting_risk_text", ""),
     )
-    if isinstance(findings.counts, Gap):
-        return view._replace(waits=labels.PATIENT_WAITS)
+    if lacking(findings) is not None:
+        return view._replace(waits=WAITS.get(findings.form, labels.PATIENT_WAITS))
     if isinstance(findings.patient, Gap):
         return view if view.mark else view._replace(waits=gap_text(findings.patient))
     return _with_patient(view, outcome, findings, findings.patient, choices, bars)
@@ -100,10 +111,27 @@ def _picture_words(words: PatientWords, lines: tuple[str, ...], drawn: Plan) -> 
     )
 
 
+def _effect(outcome: Outcome, findings: OutcomeFindings) -> str:
+    """The effect that is carried: the one chosen, unless design or print leave no choice."""
+    if isinstance(findings.patient, PatientFindings):
+        return findings.patient.effect
+    if outcome.design == "case-control" or (findings.form == "effect-only" and outcome.paper_measure == "odds_ratio"):
+        return "odds_ratio"
+    return outcome.patient.effect
+
+
+def carried_measure(findings: OutcomeFindings, key: str) -> Figure | AnyNumberNeeded | Gap | None:
+    """The measure that stands for an effect: the pooled one where there are strata."""
+    pooled = findings.strata.pooled if isinstance(findings.strata, StrataFindings) else {}
+    return pooled.get(f"pooled_{key}") or findings.measures.get(key)
+
+
 def _baseline_hint(outcome: Outcome, findings: OutcomeFindings) -> str:
-    if outcome.design == "case-control":
+    if outcome.design == "case-control" or findings.form in ("effect-only", "strata"):
         return labels.BASELINE_HINT_NEEDED
-    risk = findings.measures["risk_reference"]
+    if findings.form not in COUNTED_FORMS:
+        return ""
+    risk = findings.measures.get("risk_reference")
     if isinstance(risk, Figure) and not isinstance(risk.estimate, Gap):
         return labels.BASELINE_HINT.format(percent=numbers.percent(risk.estimate))
     return ""
@@ -114,7 +142,7 @@ def _effect_words(outcome: Outcome, findings: OutcomeFindings) -> dict[str, str]
     result: dict[str, str] = {}
     effects: tuple[Effect, ...] = ("risk_ratio", "odds_ratio")
     for key in effects:
-        figure, name = findings.measures[key], effect_name(outcome, key)
+        figure, name = carried_measure(findings, key), effect_name(outcome, key)
         result[key] = name
         if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
             result[key] = labels.EFFECT_KEPT.format(effect=name, value=numbers.ratio(figure.estimate))

@@ -5,11 +5,11 @@ While nothing is typed, the column is the table and one quiet line; the window p
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, NamedTuple
 
 from PySide6.QtCore import Signal
 from PySide6.QtGui import QAction
-from PySide6.QtWidgets import QGridLayout, QVBoxLayout, QWidget
+from PySide6.QtWidgets import QHBoxLayout, QVBoxLayout, QWidget
 
 from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.look import Look
@@ -24,6 +24,14 @@ if TYPE_CHECKING:
     from fourcount.face.printed.row_links import RowLinks
     from fourcount.face.printed.strata_rows import StrataRows
     from fourcount.record.entry.readings import Pasted
+
+
+class TabStops(NamedTuple):
+    """Where Tab comes from: to the table's place, to what stands right under it, and to the column's foot."""
+
+    table: QWidget
+    under: QWidget
+    foot: QWidget
 
 
 class RareParts(FieldsView):
@@ -42,15 +50,15 @@ class RareParts(FieldsView):
     paste_left = Signal()
 
     def __init__(
-        self, owner: QWidget, look: Look, actions: dict[str, QAction], column: QVBoxLayout, rows: QGridLayout
+        self, look: Look, actions: dict[str, QAction], column: QVBoxLayout, row: QHBoxLayout, stops: TabStops
     ) -> None:
         super().__init__()
-        self.setParent(owner)
         self.hide()
+        self._stops = stops
         self._look = look
         self._actions = actions
         self._column = column
-        self._form_rows = rows
+        self._printed_row = row
         self._alone = False
         self._asked_for = False
         self.strata: StrataRows | None = None
@@ -94,6 +102,7 @@ class RareParts(FieldsView):
         alone = isinstance(outcome.table, EffectOnly)
         if alone != self._alone:
             self._alone = alone
+            self._chain_paper()
             if alone:
                 self._column.insertWidget(self._place_of_table(), view.paper)
             else:
@@ -124,6 +133,7 @@ class RareParts(FieldsView):
             self.panel.taken.connect(self.paste_taken)
             self.panel.left.connect(self.paste_left)
             self._column.insertWidget(self._place_of_table(), self.panel)
+            chain(self._stops.under, self.panel.take, self.panel.turn, self.panel.leave)
         self.panel.offer(pasted, outcome)
 
     @property
@@ -185,7 +195,8 @@ class RareParts(FieldsView):
         place = self._place_of_table()
         self._column.insertWidget(place, self.strata)
         self._column.insertWidget(place + 1, self.row_links)
-        self._form_rows.addWidget(self.rows_as, 5, 1, 1, 2)
+        self._printed_row.addWidget(self.rows_as, 3)
+        chain(self._stops.table, self.rows_as, *self.strata.fields, self.row_links.add, self.row_links.remove)
         self._pass_on(self.strata)
         self.strata.row_wanted.connect(self.row_wanted)
         self.strata.row_entered.connect(self.row_links.show_current)
@@ -198,6 +209,7 @@ class RareParts(FieldsView):
         self._pass_on(made)
         made.chosen.connect(self.chosen)
         self._column.insertWidget(self._column.indexOf(self.check) if self.check else self._place_of_foot(), made)
+        chain(self._stops.foot, *made.links.values())
         return made
 
     def _make_check(self) -> CheckView:
@@ -207,7 +219,20 @@ class RareParts(FieldsView):
         self._pass_on(self.check)
         self.check.measure_chosen.connect(self._on_paper_measure)
         self._column.insertWidget(self._place_of_foot(), self.check)
+        self._chain_paper()
         return self.check
+
+    def _chain_paper(self) -> None:
+        """Tab reaches what the paper says where it stands: in the table's place, or at the foot."""
+        if self.check is None:
+            return
+        foot = self.optional.last_stop if self.optional else self._stops.foot
+        paper = (self.check.paper.measure, self.check.paper.text, self.check.paper.adjusted)
+        if self._alone:
+            chain(self._stops.table, *paper)
+            chain(foot, self.check.adopt)
+        else:
+            chain(foot, *paper, self.check.adopt)
 
     def _place_of_table(self) -> int:
         """Right under the grid, where whatever stands in its stead goes."""
@@ -222,3 +247,10 @@ class RareParts(FieldsView):
 
     def _on_paper_measure(self, measure: object) -> None:
         self.chosen.emit("paper_measure", measure)
+
+
+def chain(before: QWidget, *widgets: QWidget) -> None:
+    """Let Tab go from a widget through others in this order."""
+    for widget in widgets:
+        QWidget.setTabOrder(before, widget)
+        before = widget

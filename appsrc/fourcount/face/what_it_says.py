@@ -22,8 +22,10 @@ if TYPE_CHECKING:
 
     from fourcount.appraisal.findings import OutcomeFindings
     from fourcount.face.measure_row import ColumnHead, MeasureRow
-    from fourcount.picture.scales import Scale
     from fourcount.wording.lines import MeasureLine
+
+PRINTED_INTERVALS = ("effect-only", "risk-at-time")
+"""Forms whose intervals are the paper's own: no family and no level is chosen for them."""
 
 WORKING_PAUSE = 120
 """Milliseconds without a key after which an open working is computed anew."""
@@ -109,23 +111,22 @@ class WhatItSays(QWidget):
     def _show_rows(self) -> None:
         if self._shown is None:
             return
-        from fourcount.appraisal.findings import Gap
-        from fourcount.wording.lines import measure_lines, told_once
-        from fourcount.wording.sentence import p_line
+        from fourcount.face.says_lines import shown_lines
+        from fourcount.wording.form import lacking
 
         outcome, findings, choices = self._shown
-        untyped = isinstance(findings.counts, Gap)
-        lines: tuple[MeasureLine, ...] = ()
-        if not untyped:
-            every = measure_lines(outcome, findings, choices)
-            shown = tuple(line for line in every if self._show_more or line.group == "main")
-            lines = (*told_once(shown), p_line(findings))
-        self._show_lines(lines)
+        untyped = lacking(findings) is not None
+        self._show_lines(() if untyped else shown_lines(outcome, findings, choices, more=self._show_more))
         for widget in (self.more, *self.copies):
             widget.setVisible(not untyped)
+        computed = findings.form not in PRINTED_INTERVALS
+        self.family.setVisible(computed)
+        self.level.setVisible(computed)
 
     def _show_lines(self, lines: Sequence[MeasureLine]) -> None:
-        scales, last = _scales(lines)
+        from fourcount.face.says_lines import scales_of
+
+        scales, last = scales_of(lines)
         shown = {line.key for line in lines}
         for key, row in self._rows.items():
             if key not in shown:
@@ -142,9 +143,11 @@ class WhatItSays(QWidget):
             row.show()
         self._put_in_order([line.key for line in lines])
         if self._head and self._shown:
+            from fourcount.wording.form import level_of
             from fourcount.wording.limits import interval_name
 
-            self._head.show_words(interval_name(self._shown[2].level) if len(lines) > 1 else "")
+            _, findings, choices = self._shown
+            self._head.show_words(interval_name(level_of(findings, choices)) if len(lines) > 1 else "")
         if self._open in shown and not self.working.isHidden():
             self._working_timer.start()  # while somebody types, an open working follows at the next pause
         else:
@@ -229,19 +232,3 @@ class WhatItSays(QWidget):
         self._column.setContentsMargins(px(24), px(20), px(24), px(16))
         self._column.setSpacing(px(12))
         self.working.setContentsMargins(px(12), px(4), 0, px(12))
-
-
-def _scales(lines: Sequence[MeasureLine]) -> tuple[dict[str, Scale], dict[str, str]]:
-    """One scale for each kind of measure, and the key of the last row of the kind, which names its ends."""
-    from fourcount.picture.scales import difference_scale, ratio_scale, risk_scale
-
-    makers = {"risk": risk_scale, "difference": difference_scale, "ratio": ratio_scale}
-    scales: dict[str, Scale] = {}
-    last: dict[str, str] = {}
-    for kind, maker in makers.items():
-        mine = [line for line in lines if line.kind == kind and not line.withheld]
-        values = [v for line in mine for v in (line.estimate_value, line.low, line.high) if v is not None]
-        if values:
-            scales[kind] = maker(values)
-            last[kind] = mine[-1].key
-    return scales, last

@@ -123,6 +123,7 @@ WINDOW_TITLE = "Fourcount"
 TITLED_WINDOW = "{title} · Fourcount"
 FIRST_STEP = "New here? See an invented example"
 PATIENT_WAITS = "The picture appears once the four counts are there."
+PATIENT_WAITS_OTHERWISE = "What follows for a patient appears once the table is whole."
 BASELINE_HINT = "{percent}"
 BASELINE_HINT_NEEDED = "needed"
 
@@ -142,11 +143,11 @@ COMMANDS = {
     "swap": "&Swap groups",
     "count-other": "&Count the other outcome",
     "paste": "Paste a ta&ble or a sentence",
-    "form": "Choose how it is &printed",
-    "add-row": "&Add a row to the strata",
-    "remove-row": "Remove the row fro&m the strata",
+    "form": "Choose &how it is printed",
+    "add-row": "Add a row to &the strata",
+    "remove-row": "Remove the row &from the strata",
     "adopt": "Adopt the paper’s &method and level",
-    "paper": "Go to what the &paper says",
+    "paper": "Go to what the pap&er says",
     "layout": "Groups &down or across",
     "clear": "C&lear the counts",
     "first-cell": "&Go to the first count",

@@ -34,7 +34,6 @@ STRATUM_CELL = "row {number}, {name}"
 
 CHECK_HEAD = "Does it add up?"
 CHECK_MARKS = {True: "agrees", False: "to check"}
-ADOPT = "Adopt {family}, {level}"
 
 OPTIONAL = {
     "counting": "People or events",
@@ -74,9 +73,9 @@ OPTIONAL_FIELDS = {
     "adjusted_for_text": "What it is adjusted for",
 }
 OPTIONAL_HINTS = {
-    "icc_text": "correlation, “0.02”",
-    "cluster_size_text": "mean size, “25”",
-    "adjusted_text": "“0.58 (0.39 to 0.85)”",
+    "icc_text": "ICC “0.02”",
+    "cluster_size_text": "size “25”",
+    "adjusted_text": "“0.58 (0.39–0.85)”",
     "adjusted_for_text": "for “age, sex”",
     "randomised_text": "",
     "lost_text": "",
@@ -85,15 +84,15 @@ OPTIONAL_HINTS = {
 
 PASTE_HEAD = "Understood from what was pasted"
 PASTE_LINKS = {"take": "Take it", "turn": "Other way round", "leave": "Leave it"}
-PASTED = "Filled from the paste: {parts}. Ctrl+Z takes it back."
+PASTED = "Pasted: {parts}."
 PASTED_PARTS = {
-    "table": "the table",
-    "labels": "names of the groups",
-    "headings": "names of the outcomes",
-    "words": "the event",
-    "span": "the time span",
-    "figures": "what the paper prints",
+    "table": "table",
+    "labels": "groups",
+    "headings": "outcomes",
+    "words": "event",
+    "span": "time span",
+    "figures": "printed result",
 }
-NO_TABLE_PASTED = "What is on the clipboard is no table and no sentence with counts."
+NO_TABLE_PASTED = "Nothing pasted: no table, no sentence with counts."
 
 ROW_LINKS = {"add": "Add a row", "remove": "Remove row {number}"}

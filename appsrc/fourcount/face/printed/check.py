@@ -16,8 +16,8 @@ from fourcount.face.printed.paper_says import PaperSays
 from fourcount.face.text import Words
 from fourcount.record.outcome import EffectOnly, Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import labels, numbers
-from fourcount.wording.printed_labels import ADOPT, CHECK_HEAD, CHECK_MARKS
+from fourcount.wording import labels
+from fourcount.wording.printed_labels import CHECK_HEAD, CHECK_MARKS
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import CheckFindings
@@ -119,8 +119,9 @@ class CheckView(FieldsView):
         wanted = adopt is not None and adopt != (choices.family, choices.level)
         self.adopt.setVisible(wanted)
         if adopt and wanted:
-            family, level = adopt
-            self.adopt.show_words(ADOPT.format(family=labels.FAMILIES[family], level=numbers.level(level)))
+            from fourcount.wording.check import adopt_text
+
+            self.adopt.show_words(adopt_text(adopt))
 
     def _dress(self, row: Row, agrees: bool) -> None:
         row.sign.setFont(self._look.font("strong"))

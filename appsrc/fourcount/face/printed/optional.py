@@ -2,8 +2,6 @@
 
 from __future__ import annotations
 
-from typing import NamedTuple
-
 from PySide6.QtCore import Qt, Signal
 from PySide6.QtWidgets import QVBoxLayout, QWidget
 
@@ -27,13 +25,6 @@ OFFERED: dict[Form, tuple[str, ...]] = {
     "effect-only": ("where",),
 }
 """Which links each form offers; a row that holds something is there in every form."""
-
-
-class Part(NamedTuple):
-    """A link and the row that it opens."""
-
-    link: QuietLink
-    row: OptionalRow | None
 
 
 class OptionalFields(FieldsView):
@@ -68,6 +59,11 @@ class OptionalFields(FieldsView):
     def fields(self) -> tuple[TextField, ...]:
         """Every text field of the rows made so far."""
         return tuple(field for row in self.rows.values() for field in row.fields)
+
+    @property
+    def last_stop(self) -> QWidget:
+        """The last place at which Tab stops here."""
+        return [*self.links.values(), *(stop for row in self.rows.values() for stop in row.stops)][-1]
 
     def show_state(self, outcome: Outcome, width: int | None = None) -> None:
         """Show the rows that hold something or were opened, and links for the others that fit the form."""
@@ -106,12 +102,12 @@ class OptionalFields(FieldsView):
             later = [other for other in self.rows if list(ROWS).index(other) > list(ROWS).index(key)]
             place = self._column.indexOf(self.rows[later[0]]) if later else self._column.count()
             self._column.insertWidget(place, row)
-            before: QWidget = list(self.links.values())[-1]
-            for widget in row.stops:
-                QWidget.setTabOrder(before, widget)
-                before = widget
             self.rows[key] = row
             self.rows = {name: self.rows[name] for name in ROWS if name in self.rows}
+            before: QWidget = list(self.links.values())[-1]
+            for widget in (stop for part in self.rows.values() for stop in part.stops):
+                QWidget.setTabOrder(before, widget)
+                before = widget
         return self.rows[key]
 
     def _on_opened(self, key: str) -> None:

@@ -119,7 +119,9 @@ class OptionalRow(FieldsView):
 
     def _build(self, key: str) -> None:
         name = Words(self._look, "body", "muted", OPTIONAL_FIELDS[key], wraps=False)
-        self._layout.addWidget(self.close_link, 0, 2, Qt.AlignmentFlag.AlignTop)
+        self._layout.addWidget(
+            self.close_link, 1 if key == "adjusted" else 0, 2, Qt.AlignmentFlag.AlignTop | Qt.AlignmentFlag.AlignRight
+        )
         if key == "losses":
             self._build_losses(name)
             return
@@ -132,7 +134,7 @@ class OptionalRow(FieldsView):
         last = fields.pop() if key == "adjusted" else None
         for field in fields:
             line.addWidget(field, 1)
-        self._layout.addLayout(line, 0, 1)
+        self._layout.addLayout(line, 0, 1, 1, 2 if last else 1)
         if last:
             self._layout.addWidget(last, 1, 1)
 
@@ -144,7 +146,7 @@ class OptionalRow(FieldsView):
         self._layout.addLayout(table, 0, 0, 1, 2)
         table.addWidget(name, 0, 0)
         for column, text in enumerate(LOSSES, start=1):
-            head = Words(self._look, "small", "muted", OPTIONAL_FIELDS[text])
+            head = Words(self._look, "small", "muted", OPTIONAL_FIELDS[text], wraps=" " in OPTIONAL_FIELDS[text])
             head.setAlignment(Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignBottom)
             table.addWidget(head, 0, column)
             table.setColumnStretch(column, 2)
@@ -152,7 +154,7 @@ class OptionalRow(FieldsView):
                 field = self._texts[f"{group}_{text}"]
                 field.setAlignment(Qt.AlignmentFlag.AlignRight)
                 table.addWidget(field, row, column)
-        table.setColumnStretch(0, 3)
+        table.setColumnMinimumWidth(0, 72)
         for row, words in enumerate(self._group_names.values(), start=1):
             table.addWidget(words, row, 0)
 
@@ -171,5 +173,5 @@ class OptionalRow(FieldsView):
         self.chosen.emit(ROWS[self._key].choice, choice)
 
     def _on_look_changed(self) -> None:
-        self._layout.setHorizontalSpacing(self._look.px(12))
+        self._layout.setHorizontalSpacing(self._look.px(12 if self._key != "losses" else 4))
         self._layout.setVerticalSpacing(self._look.px(2))

@@ -31,6 +31,7 @@ class PastePanel(QWidget):
         self._look = look
         self.outcome = Outcome()
         self.pasted: Pasted | None = None
+        self._ways: tuple[Pasted, ...] = ()
         self.head = Words(look, "strong", "ink", PASTE_HEAD)
         self.understood = Words(look, "body", "ink", selectable=True)
         self.uncertain = Words(look, "small", "caution")
@@ -53,19 +54,21 @@ class PastePanel(QWidget):
 
     def offer(self, pasted: Pasted, outcome: Outcome) -> None:
         """Show what was understood, with the cursor on taking it."""
+        from fourcount.record.entry.turning import ways
+
         self.outcome = outcome
+        self._ways = ways(pasted)
+        self.turn.setVisible(len(self._ways) > 1)
         self._show(pasted)
         self.show()
         self.take.setFocus(Qt.FocusReason.OtherFocusReason)
 
     def _show(self, pasted: Pasted) -> None:
-        from fourcount.record.entry.turning import can_turn
         from fourcount.wording.pasted import uncertain, understood
 
         self.pasted = pasted
         self.understood.show_words("\n".join(understood(pasted, self.outcome)))
         self.uncertain.show_words("\n".join(uncertain(pasted)))
-        self.turn.setVisible(can_turn(pasted))
         said = f"{self.understood.text()}\n{self.uncertain.text()}"
         self.setAccessibleDescription(said)
         self.take.setAccessibleDescription(said)
@@ -89,10 +92,8 @@ class PastePanel(QWidget):
         self.taken.emit(self.pasted)
 
     def _on_turn(self) -> None:
-        from fourcount.record.entry.turning import turned
-
-        if self.pasted is not None:
-            self._show(turned(self.pasted))
+        self._ways = (*self._ways[1:], self._ways[0])
+        self._show(self._ways[0])
 
     def _on_leave(self) -> None:
         self.hide()

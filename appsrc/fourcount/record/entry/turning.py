@@ -1,32 +1,49 @@
-"""The other way in which a doubtful paste can be understood: the same numbers, placed otherwise."""
+"""The ways in which a doubtful paste can be understood: the same numbers, placed otherwise."""
 
 from __future__ import annotations
 
 from msgspec.structs import replace
 
-from fourcount.record.entry.readings import Pasted, PastedGroup
+from fourcount.record.entry.cell import read_cell
+from fourcount.record.entry.readings import Count, Pasted, PastedGroup
 from fourcount.record.outcome import Form
 
 OTHER_FORMS: dict[str, dict[Form, Form]] = {
-    "pairs-or-groups": {"pairs": "events-and-others", "events-and-others": "pairs"},
     "others-or-totals": {"events-and-others": "events-of-total", "events-of-total": "events-and-others"},
+    "pairs-or-groups": {"pairs": "events-and-others", "events-and-others": "pairs"},
 }
 """For a doubt, the forms that its counts may have instead."""
 
-
-def can_turn(pasted: Pasted) -> bool:
-    """Whether one of the doubts has an other way round."""
-    return turned(pasted) is not pasted
+TURNABLE: tuple[Form, ...] = ("events-and-others", "events-of-total")
 
 
-def turned(pasted: Pasted) -> Pasted:
-    """The other way; turned twice, a paste is what it was. One without such a doubt stays as it is."""
-    if "orientation" in pasted.ambiguous and pasted.form == "events-and-others" and len(pasted.groups) == 2:
-        return _transposed(pasted)
-    for doubt, forms in OTHER_FORMS.items():
-        if doubt in pasted.ambiguous and pasted.form in forms:
-            return replace(pasted, form=forms[pasted.form])
-    return pasted
+def ways(pasted: Pasted) -> tuple[Pasted, ...]:
+    """Every way, the one that was taken first; only that one where no doubt has another."""
+    upright = (pasted, *_other_forms(pasted))
+    if "orientation" not in pasted.ambiguous or pasted.form not in TURNABLE or len(pasted.groups) != 2:
+        return upright
+    turned = (_transposed(way) for way in upright if way.form in TURNABLE)
+    return (*upright, *(way for way in turned if _possible(way)))
+
+
+def _other_forms(pasted: Pasted) -> tuple[Pasted, ...]:
+    others = [
+        replace(pasted, form=forms[pasted.form])
+        for doubt, forms in OTHER_FORMS.items()
+        if doubt in pasted.ambiguous and pasted.form in forms
+    ]
+    return tuple(way for way in others if _possible(way))
+
+
+def _possible(pasted: Pasted) -> bool:
+    """Whether events fit into their totals, where totals are what stands beside them."""
+    if pasted.form != "events-of-total":
+        return True
+    for group in pasted.groups:
+        events, total = read_cell(group.left_text), read_cell(group.right_text)
+        if isinstance(events, Count) and isinstance(total, Count) and events.value > total.value:
+            return False
+    return True
 
 
 def _transposed(pasted: Pasted) -> Pasted:
