@@ -6,6 +6,7 @@ import importlib
 import subprocess
 import sys
 
+import msgspec
 import pytest
 
 from fourcount.appraisal import appraise as module
@@ -33,10 +34,14 @@ def test_memory_is_bounded():
 
 @pytest.mark.parametrize("family", ["score", "textbook"])
 def test_a_quick_family_never_follows(study, family, monkeypatch):
-    """Closed forms need nothing loaded: deferring changes nothing."""
+    """Closed forms need nothing loaded: deferring changes nothing, but for a trial's fragility under the fold."""
     monkeypatch.setattr(module, "numbers_loaded", lambda: False)
     choices = Choices(family=family)
-    assert appraise(study(*HUGE), choices, deferring=True) is appraise(study(*HUGE), choices)
+    cohort = study(*HUGE, design="cohort")
+    assert appraise(cohort, choices, deferring=True) is appraise(cohort, choices)
+    trial, later = appraise(study(*HUGE), choices, deferring=True), appraise(study(*HUGE), choices)
+    assert Gap("follows") == trial.extras.fragility
+    assert msgspec.structs.replace(later, extras=trial.extras) == trial
 
 
 def test_exact_figures_follow_until_the_libraries_are_loaded(study, monkeypatch):
@@ -121,7 +126,9 @@ from fourcount.record.outcome import EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import Choices
 table = EventsAndOthers(first_left_text="38", first_right_text="374", second_left_text="70", second_right_text="339")
 for family in ("score", "textbook"):
-    appraise(Outcome(table=table, patient=Patient(starting_risk_text="12%")), Choices(family=family))
+    for design in ("trial", "cohort"):
+        outcome = Outcome(table=table, design=design, patient=Patient(starting_risk_text="12%"))
+        appraise(outcome, Choices(family=family), deferring=True)
 deferred = appraise(Outcome(table=table), Choices(family="exact"), deferring=True)
 assert deferred.test.p.key == "follows", deferred.test
 heavy = {"numpy", "scipy", "PySide6"} & {name.partition(".")[0] for name in sys.modules}
@@ -130,7 +137,7 @@ assert not heavy, heavy
 
 
 def test_score_and_textbook_load_no_library():
-    """A fresh interpreter appraises by closed forms, and defers the exact family, without numpy, scipy or Qt."""
+    """A fresh interpreter appraises by closed forms, and defers what is exact, without numpy, scipy or Qt."""
     done = subprocess.run([sys.executable, "-c", LIGHT], capture_output=True, text=True, check=False)
     assert done.stderr == ""
     assert done.returncode == 0

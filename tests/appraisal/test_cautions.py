@@ -14,10 +14,14 @@ TABLE = (38, 374, 70, 339)
 def test_the_keys_in_order():
     """What changes the reader's conclusion comes first."""
     assert list(dict.fromkeys(rule.key for rule in CAUTIONS)) == [
-        "read-as", "percent-disagrees", "index-looks-like-control",
-        "odds-ratio-differs", "effect-kept-constant", "baseline-far", "baseline-uncertain", "rests-on-baseline",
-        "totals-are-sampled", "controls-over-time", "observational", "converted-limits", "zero-cells", "half-added",
-        "through-no-effect", "family-parts", "rare-harm", "leans",
+        "read-as", "percent-disagrees", "percent-several", "percent-none", "index-looks-like-control", "no-control",
+        "abstract-only", "cannot-be-checked", "interval-rebuilt", "printed-level", "concordant-unknown",
+        "hazard-ratio", "events-counted", "follow-up-varied", "randomised-differs", "losses-overturn",
+        "cluster-without-icc", "cluster-corrected", "cluster-uncorrected", "strata-part", "strata-odds-ratio-parts",
+        "strata-unlike", "no-meta-analysis", "odds-ratio-differs", "effect-kept-constant", "effect-kept-elsewhere",
+        "baseline-far", "baseline-uncertain", "rests-on-baseline", "totals-are-sampled", "controls-over-time",
+        "observational", "adjusted-effect", "crude-beside-adjusted", "converted-limits", "adjusted-converted",
+        "zero-cells", "half-added", "through-no-effect", "family-parts", "rare-harm", "leans",
     ]  # fmt: skip
 
 

@@ -2,41 +2,58 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, field
 
 from fourcount.appraisal.findings import (
     Conversion,
     Counts,
+    Extras,
     Figure,
     Gap,
+    Given,
     Interval,
     Mark,
     PatientFindings,
     Probability,
     Range,
+    StrataFindings,
 )
-from fourcount.appraisal.measures import Figures, Table
-from fourcount.record.outcome import Outcome
+from fourcount.appraisal.losses import Randomised
+from fourcount.appraisal.measures import Figures
+from fourcount.record.outcome import Form, Outcome
+from fourcount.record.paper import Choices
 
-NO_EFFECT = {"risk_difference": 0.0, "risk_ratio": 1.0, "odds_ratio": 1.0}
-"""The value of each measure of effect at which the two groups fare alike."""
+
+def no_effect_of(measure: str) -> float:
+    """The value of a measure of effect at which the two groups fare alike."""
+    return 0.0 if measure.endswith("difference") else 1.0
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Case:
-    """One outcome with the figures that its design supports."""
+    """One outcome with the figures that its form and its design support.
+
+    A rule that looks at ``counts`` is asked only of the forms that give them.
+    """
 
     outcome: Outcome
-    table: Table
+    form: Form
+    given: Given | Gap
+    choices: Choices
     figures: Figures
-    test: Probability
+    test: Probability | Gap
     conversion: Conversion | Gap
     patient: PatientFindings | Gap
     marks: tuple[Mark, ...] = ()
+    extras: Extras = field(default_factory=Extras)
+    strata: StrataFindings | None = None
+    randomised: tuple[Randomised, ...] = ()
 
     @property
     def counts(self) -> Counts:
-        return self.table.counts
+        if not isinstance(self.given, Counts):
+            raise TypeError(f"the form {self.form} has no four counts")
+        return self.given
 
     @property
     def carried(self) -> PatientFindings | None:
@@ -57,11 +74,17 @@ def straddles(interval: Interval | Range | Gap, no_effect: float) -> bool | None
     return interval.low < no_effect and beyond
 
 
-def excludes(figure: Figure | None, no_effect: float) -> bool | None:
-    """Whether no effect lies strictly outside the figure's interval; None where there is no whole interval."""
+def side_of(figure: Figure | None, no_effect: float) -> int | None:
+    """1 or -1 where the interval lies above or below no effect, 0 where it does not exclude it; None without one."""
     if figure is None or not isinstance(figure.interval, Interval):
         return None
-    return figure.interval.low > no_effect or figure.interval.high < no_effect
+    return (figure.interval.low > no_effect) - (figure.interval.high < no_effect)
+
+
+def excludes(figure: Figure | None, no_effect: float) -> bool | None:
+    """Whether no effect lies strictly outside the figure's interval; None where there is no whole interval."""
+    side = side_of(figure, no_effect)
+    return None if side is None else side != 0
 
 
 def value(figure: Figure | None) -> float | None:

@@ -4,11 +4,38 @@ from __future__ import annotations
 
 import math
 import re
+from collections.abc import Mapping
+from types import MappingProxyType
 
-from fourcount.appraisal.case import NO_EFFECT, Case, excludes, straddles, value
-from fourcount.appraisal.findings import Fact, Gap, Interval
+from fourcount.appraisal.case import Case, excludes, no_effect_of, straddles, value
+from fourcount.appraisal.extras.e_values import OBSERVATIONAL
+from fourcount.appraisal.findings import Fact, Gap, Interval, PrintedFigure
+from fourcount.record.outcome import COUNTED_FORMS, Form
 
 Facts = dict[str, Fact]
+
+HEADLINES = (
+    "pooled_risk_difference",
+    "pooled_odds_ratio",
+    "risk_difference",
+    "pair_difference",
+    "rate_difference",
+    "pair_odds_ratio",
+    "risk_ratio",
+    "odds_ratio",
+    "hazard_ratio",
+    "rate_ratio",
+)
+"""The measures that a headline may be about; the first that a table has is the one."""
+
+COMPARED: Mapping[Form, tuple[str, ...]] = MappingProxyType(
+    {
+        **dict.fromkeys(COUNTED_FORMS, ("risk_difference", "risk_ratio", "odds_ratio")),
+        "pairs": ("pair_difference", "pair_ratio", "pair_odds_ratio"),
+        "person-time": ("rate_difference", "rate_ratio"),
+    }
+)
+"""The measures whose intervals are set beside the family's own p."""
 
 COMPARISON = re.compile(r"\b(placebo|control|usual care|standard care|no treatment|sham)\b", re.IGNORECASE)
 """What papers call the group that the other one is compared with (common practice)."""
@@ -20,12 +47,9 @@ FEW_HARMED = 10
 """With fewer harmed people in the index group than this, a trial shows a rare harm badly: our own threshold."""
 
 
-def used_though_marked(case: Case, *, key: str, field: str) -> Facts | None:
-    """A cell is marked and its count used all the same, which every copy has to say as the screen does."""
-    for mark in case.marks:
-        if mark.used and (mark.key, mark.field) == (key, field):
-            return dict(mark.facts)
-    return None
+def used_though_marked(case: Case, *, key: str) -> tuple[Facts, ...]:
+    """Cells are marked and their counts used all the same, which every copy has to say as the screen does."""
+    return tuple(dict(mark.facts) for mark in case.marks if mark.used and mark.key == key)
 
 
 def index_looks_like_control(case: Case) -> Facts | None:
@@ -99,14 +123,14 @@ def controls_over_time(case: Case) -> Facts | None:
 
 
 def observational(case: Case) -> Facts | None:
-    """The groups were not made alike by chance, and the counts give the crude effect only."""
-    return None if case.outcome.design == "trial" else {"design": case.outcome.design}
+    """The groups were not made alike by chance, and the figures are crude."""
+    return {"design": case.outcome.design} if case.outcome.design in OBSERVATIONAL and not _adjusted(case) else None
 
 
 def converted_limits(case: Case) -> Facts | None:
-    """The odds ratio is carried, and its limits were converted at a given starting risk."""
+    """The odds ratio is carried, and its limits were converted at a given starting risk; adjusted ones say so."""
     conversion = case.conversion
-    if case.carried is None or case.carried.effect != "odds_ratio":
+    if case.carried is None or case.carried.effect != "odds_ratio" or _adjusted(case):
         return None
     if isinstance(conversion, Gap) or conversion.baseline_from != "given":
         return None
@@ -132,21 +156,23 @@ def half_added(case: Case, *, measure: str) -> Facts | None:
 
 
 def through_no_effect(case: Case) -> Facts | None:
-    """The interval of the headline holds fewer and more: the difference's, or in a case-control study the odds ratio's.
+    """The interval of the headline holds fewer and more: the difference's, or where there is none the ratio's.
 
     Where the difference has no interval, the headline says so, and no other one speaks for it.
     """
-    measure = "risk_difference" if "risk_difference" in case.figures else "odds_ratio"
-    return {} if straddles(case.figures[measure].interval, NO_EFFECT[measure]) else None
+    measure = next((measure for measure in HEADLINES if measure in case.figures), None)
+    if measure is None:
+        return None
+    return {} if straddles(case.figures[measure].interval, no_effect_of(measure)) else None
 
 
 def family_parts(case: Case) -> Facts | None:
     """The family's p and one of its intervals differ about no effect, since they rest on different methods."""
-    if isinstance(case.test.p, Gap):
+    if isinstance(case.test, Gap) or isinstance(case.test.p, Gap):
         return None
-    small_p = case.test.p < 1 - case.table.choices.level
-    for measure, no_effect in NO_EFFECT.items():
-        outside = excludes(case.figures.get(measure), no_effect)
+    small_p = case.test.p < 1 - case.choices.level
+    for measure in COMPARED[case.form]:
+        outside = excludes(case.figures.get(measure), no_effect_of(measure))
         if outside is not None and outside != small_p:
             return {}
     return None
@@ -179,6 +205,14 @@ def leans(case: Case) -> Facts | None:
     if difference < 0 and reaches_up:
         return {"side": "more"}
     return {"side": "fewer"} if difference > 0 and reaches_down else None
+
+
+def _adjusted(case: Case) -> bool:
+    """Whether the table is an effect that was adjusted for something."""
+    printed = case.given
+    if not isinstance(printed, PrintedFigure):
+        return False
+    return printed.adjusted or bool(case.outcome.adjusted_for_text.strip())
 
 
 def _printed_alike(one: float, study: float) -> bool:

@@ -3,14 +3,13 @@
 from __future__ import annotations
 
 import math
-from collections.abc import Callable, Mapping
+from collections.abc import Callable, Container, Mapping
 from dataclasses import dataclass
 from types import MappingProxyType
 
 from fourcount.appraisal.findings import (
     MEASURES,
     AnyNumberNeeded,
-    Counts,
     Figure,
     Gap,
     Interval,
@@ -25,22 +24,32 @@ from fourcount.record.paper import Choices
 from fourcount.stats import estimates
 from fourcount.stats.methods import FAMILIES, method, test
 from fourcount.stats.number_needed import number_needed
+from fourcount.stats.results import FractionalCounts
 
 Figures = Mapping[str, Figure]
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Table:
-    """One table, how its intervals are computed, and which methods are left for later."""
+    """One table, how its intervals are computed, and which methods are left for later.
 
-    counts: Counts
+    ``behind`` are the counts behind intervals and tests where they are not the table's own (those of a cluster trial,
+    divided by its design effect), or the reason why there are no intervals.
+    """
+
+    counts: FractionalCounts
     choices: Choices
-    postponed: frozenset[str]
+    postponed: frozenset[str] = frozenset()
+    behind: FractionalCounts | Gap | None = None
+
+    @property
+    def effective(self) -> FractionalCounts | Gap:
+        return self.counts if self.behind is None else self.behind
 
 
-def all_figures(table: Table, support: Support) -> Figures:
+def all_figures(table: Table, support: Support, only: Container[str] = MEASURES) -> dict[str, Figure]:
     """Every figure that the design supports, by the key of its measure, except the number needed."""
-    return {key: compute(table) for key, compute in _FIGURES.items() if key not in support.withheld}
+    return {key: compute(table) for key, compute in _FIGURES.items() if key not in support.withheld and key in only}
 
 
 def measures(figures: Figures, support: Support, *, welcome: bool) -> dict[str, Figure | AnyNumberNeeded | Gap]:
@@ -94,13 +103,21 @@ def _half_known(difference: float, interval: Range, *, welcome: bool) -> NumberN
 def own_test(table: Table) -> Probability:
     """The two-sided p of the family's own test."""
     key = FAMILIES[table.choices.family].test
-    p = Gap("follows") if key in table.postponed else test(key).p(table.counts)
-    return Probability(p=p, method=key)
+    return Probability(p=_p(table, key), method=key)
 
 
-def other_outcome(counts: Counts) -> Counts:
+def _p(table: Table, key: str) -> float | Gap:
+    if isinstance(table.effective, Gap):
+        return table.effective
+    if key in table.postponed:
+        return Gap("follows")
+    p = test(key).p(table.effective)
+    return _said_of_clusters(p) if isinstance(p, Gap) else p
+
+
+def other_outcome(counts: FractionalCounts) -> FractionalCounts:
     """The same people with the other outcome counted."""
-    return Counts(
+    return type(counts)(
         index_events=counts.index_non_events,
         index_non_events=counts.index_events,
         reference_events=counts.reference_non_events,
@@ -108,20 +125,31 @@ def other_outcome(counts: Counts) -> Counts:
     )
 
 
-def _risk(table: Table, events: int, total: int) -> Figure:
+Group = Callable[[FractionalCounts], tuple[float, float]]
+
+
+def _index(counts: FractionalCounts) -> tuple[float, float]:
+    return counts.index_events, counts.index_total
+
+
+def _reference(counts: FractionalCounts) -> tuple[float, float]:
+    return counts.reference_events, counts.reference_total
+
+
+def _risk(table: Table, group: Group) -> Figure:
     key = FAMILIES[table.choices.family].risk
-    interval = _interval(table, "risk", key, events, total)
-    return Figure(estimate=estimates.risk(events, total), interval=interval, method=key)
+    interval = _interval(table, "risk", key, group)
+    return Figure(estimate=estimates.risk(*group(table.counts)), interval=interval, method=key)
 
 
-def _odds(table: Table, events: int, total: int) -> Figure:
+def _odds(table: Table, group: Group) -> Figure:
     """Odds with the limits of the risk, each mapped p/(1-p): the map is monotone, so the coverage is the same.
 
     The textbook family takes the limits of its own method for odds, since Wald's can lie where no odds are.
     """
     key = FAMILIES[table.choices.family].odds
-    interval = _as_odds(_interval(table, "risk", key, events, total))
-    return Figure(estimate=estimates.odds(events, total), interval=interval, method=key)
+    interval = _as_odds(_interval(table, "risk", key, group))
+    return Figure(estimate=estimates.odds(*group(table.counts)), interval=interval, method=key)
 
 
 def _as_odds(interval: Interval | Gap) -> Interval | Gap:
@@ -131,51 +159,69 @@ def _as_odds(interval: Interval | Gap) -> Interval | Gap:
     return Interval(low=low, high=high, adjusted=interval.adjusted)
 
 
-def _interval(table: Table, measure: str, key: str, *arguments: int | Counts) -> Interval | Gap:
+def _whole(counts: FractionalCounts) -> tuple[FractionalCounts]:
+    return (counts,)
+
+
+def _other(counts: FractionalCounts) -> tuple[FractionalCounts]:
+    return (other_outcome(counts),)
+
+
+def _interval(
+    table: Table, measure: str, key: str, arguments: Callable[[FractionalCounts], tuple[object, ...]]
+) -> Interval | Gap:
+    if isinstance(table.effective, Gap):
+        return table.effective
     if key in table.postponed:
         return Gap("follows")
-    return method(measure, key).interval(*arguments, table.choices.level)
+    interval = method(measure, key).interval(*arguments(table.effective), table.choices.level)
+    return _said_of_clusters(interval) if isinstance(interval, Gap) else interval
+
+
+def _said_of_clusters(gap: Gap) -> Gap:
+    """Counts are not whole here because of a design effect, or of a share of the people lost."""
+    return Gap("cluster-no-exact") if gap.key == "not-whole" else gap
 
 
 def _risk_index(table: Table) -> Figure:
-    return _risk(table, table.counts.index_events, table.counts.index_total)
+    return _risk(table, _index)
 
 
 def _risk_reference(table: Table) -> Figure:
-    return _risk(table, table.counts.reference_events, table.counts.reference_total)
+    return _risk(table, _reference)
 
 
 def _odds_index(table: Table) -> Figure:
-    return _odds(table, table.counts.index_events, table.counts.index_total)
+    return _odds(table, _index)
 
 
 def _odds_reference(table: Table) -> Figure:
-    return _odds(table, table.counts.reference_events, table.counts.reference_total)
+    return _odds(table, _reference)
 
 
-def _risk_difference(table: Table) -> Figure:
+def risk_difference(table: Table) -> Figure:
+    """The difference with the family's interval."""
     key = FAMILIES[table.choices.family].risk_difference
-    interval = _interval(table, "risk_difference", key, table.counts)
+    interval = _interval(table, "risk_difference", key, _whole)
     return Figure(estimate=estimates.risk_difference(table.counts), interval=interval, method=key)
 
 
-def _risk_ratio(table: Table) -> Figure:
-    return _ratio_of(table.counts, table)
+def risk_ratio(table: Table) -> Figure:
+    """The risk ratio with the family's interval."""
+    key = FAMILIES[table.choices.family].risk_ratio
+    interval = _interval(table, "risk_ratio", key, _whole)
+    return Figure(estimate=estimates.risk_ratio(table.counts), interval=interval, method=key)
 
 
 def _other_risk_ratio(table: Table) -> Figure:
-    return _ratio_of(other_outcome(table.counts), table)
-
-
-def _ratio_of(counts: Counts, table: Table) -> Figure:
     key = FAMILIES[table.choices.family].risk_ratio
-    interval = _interval(table, "risk_ratio", key, counts)
-    return Figure(estimate=estimates.risk_ratio(counts), interval=interval, method=key)
+    interval = _interval(table, "risk_ratio", key, _other)
+    return Figure(estimate=estimates.risk_ratio(other_outcome(table.counts)), interval=interval, method=key)
 
 
 def _odds_ratio(table: Table) -> Figure:
     key = FAMILIES[table.choices.family].odds_ratio
-    interval = _interval(table, "odds_ratio", key, table.counts)
+    interval = _interval(table, "odds_ratio", key, _whole)
     return Figure(estimate=estimates.odds_ratio(table.counts), interval=interval, method=key)
 
 
@@ -185,8 +231,8 @@ _FIGURES: Mapping[str, Callable[[Table], Figure]] = MappingProxyType(
         "risk_reference": _risk_reference,
         "odds_index": _odds_index,
         "odds_reference": _odds_reference,
-        "risk_difference": _risk_difference,
-        "risk_ratio": _risk_ratio,
+        "risk_difference": risk_difference,
+        "risk_ratio": risk_ratio,
         "other_risk_ratio": _other_risk_ratio,
         "odds_ratio": _odds_ratio,
     }

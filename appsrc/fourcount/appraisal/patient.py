@@ -18,7 +18,7 @@ def carry(
     """Risk without and with, their difference and the number needed, by the table or by the effect."""
     if start.origin == "reference":
         return _from_table(figures, start, effect, support, welcome=welcome)
-    return _from_effect(figures[effect], start, effect, support, welcome=welcome)
+    return carry_effect(figures[effect], start, effect, support, welcome=welcome)
 
 
 def _from_table(
@@ -46,7 +46,7 @@ def _from_table(
     )
 
 
-def _from_effect(
+def carry_effect(
     carried: Figure, start: StartingRisk, effect: Effect, support: Support, *, welcome: bool
 ) -> PatientFindings | Gap:
     """The effect's estimate and limits at a bare starting risk.

@@ -7,7 +7,10 @@ import msgspec
 from fourcount.appraisal.findings import Counts, Gap, Mark, Totals
 from fourcount.record.entry.readings import GroupCounts, TableReading
 from fourcount.record.entry.table import read_table
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import EventsAndOthers, EventsOfTotal, Outcome, PercentOfTotal
+
+FOUR_COUNTS = (EventsAndOthers, EventsOfTotal, PercentOfTotal)
+_NOBODY = GroupCounts()
 
 
 class ReadTable(msgspec.Struct, frozen=True, kw_only=True):
@@ -20,11 +23,13 @@ class ReadTable(msgspec.Struct, frozen=True, kw_only=True):
 
 def read(outcome: Outcome) -> ReadTable:
     """Read the outcome's table. A cell that gives no count outweighs one that is still empty."""
-    reading = read_table(outcome.table)
-    return ReadTable(counts=_counts(reading, outcome), totals=_totals(reading), marks=reading.marks)
+    table = outcome.table
+    reading = read_table(table) if isinstance(table, FOUR_COUNTS) else TableReading(first=_NOBODY, second=_NOBODY)
+    return ReadTable(counts=oriented(reading, outcome), totals=totals_of(reading), marks=reading.marks)
 
 
-def _counts(reading: TableReading, outcome: Outcome) -> Counts | Gap:
+def oriented(reading: TableReading, outcome: Outcome) -> Counts | Gap:
+    """The four counts of the index and the reference group and of the counted outcome, or why there are none yet."""
     if any(not mark.used for mark in reading.marks):
         return Gap("unreadable")
     index, reference = (
@@ -48,7 +53,8 @@ def _events_and_others(group: GroupCounts, outcome: Outcome) -> tuple[int, int] 
     return (group.left, group.right) if outcome.counted == "left" else (group.right, group.left)
 
 
-def _totals(reading: TableReading) -> Totals:
+def totals_of(reading: TableReading) -> Totals:
+    """The margins, as far as they are known."""
     first, second = _group_total(reading.first), _group_total(reading.second)
     return Totals(
         first_left=reading.first.left,

@@ -7,7 +7,7 @@ from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings
 
 def waits(findings: OutcomeFindings) -> bool:
     """Whether a figure of these findings is computed apart and follows later."""
-    parts: list[object] = [findings.test, getattr(findings.test, "p", None)]
+    parts: list[object] = [findings.test, getattr(findings.test, "p", None), findings.extras.fragility]
     for measure in findings.measures.values():
         parts.append(measure)
         if isinstance(measure, Figure):

@@ -12,12 +12,17 @@ from fourcount.stats.results import Gap
 
 
 class EValues(msgspec.Struct, frozen=True, kw_only=True):
-    """The E-value of the estimate and of the limit nearest no effect; ``converted`` where an odds ratio of a common
-    outcome, or a hazard ratio, was turned into a risk ratio first (by the square-root rule)."""
+    """The E-value of the estimate and of the limit nearest no effect.
+
+    ``measure`` is the ratio that it is of, ``adjusted`` whether that is the printed adjusted one. ``converted`` is
+    "odds_ratio" or "hazard_ratio" where such a ratio of a common outcome was turned into a risk ratio first.
+    """
 
     estimate: float
     limit: float | Gap
     converted: str = ""
+    measure: str = "risk_ratio"
+    adjusted: bool = False
 
 
 class Fragility(msgspec.Struct, frozen=True, kw_only=True):

@@ -55,6 +55,12 @@ GAP_KEYS = (
     "no-losses",  # nobody is said to be lost
     "losses-unreadable",  # the number lost, or the ratio of risks among them, cannot be read
     "limits-not-printed",  # a risk without its limits: no interval of the difference
+    "clusters-not-here",  # this form, or this figure, has no correction for clusters
+    "losses-of-one-group",  # how many were lost is known in one group only, or in none
+    "effect-out-of-range",  # a printed ratio below 0, or a printed difference beyond 100 in 100
+    "effect-needs-baseline",  # a printed effect alone holds no starting risk
+    "strata-need-baseline",  # strata have a starting risk each, and none in common
+    "other-outcome-unknown",  # this printed effect says nothing of the other outcome
     "not-counts",  # this form has no four counts
     "not-typed",  # not all four counts are there yet
     "unreadable",  # a cell holds text that gives no count

@@ -1,0 +1,1 @@
+"""What stands under the fold of a table."""

@@ -1,0 +1,65 @@
+"""A printed effect as a figure on the program's own scales."""
+
+from __future__ import annotations
+
+import msgspec
+
+from fourcount.appraisal.findings import EFFECT_MEASURES, Figure, Gap, Interval, Mark, PrintedFigure
+from fourcount.record.entry.printed import read_paper
+from fourcount.record.outcome import Outcome, PaperMeasure
+
+PRINTED = "printed"
+"""The method of a figure that is taken over as it is printed."""
+
+USUAL_LEVEL = 0.95
+"""The level of a printed interval that says none: common practice."""
+
+DIFFERENCES = ("risk_difference", "rate_difference")
+_UNITS = {"one": 1.0, "percent": 100.0, "per-1000": 1000.0}
+
+
+class ReadEffect(msgspec.Struct, frozen=True, kw_only=True):
+    """The effect that a printed text holds, or why there is none, and the marks of its field."""
+
+    effect: PrintedFigure | Gap
+    marks: tuple[Mark, ...] = ()
+
+    @property
+    def figure(self) -> PrintedFigure | None:
+        return None if isinstance(self.effect, Gap) else self.effect
+
+
+def adjusted_of(outcome: Outcome) -> ReadEffect:
+    """The adjusted effect that stands beside the counts."""
+    return read_effect(outcome.adjusted_text, outcome.adjusted_measure, "adjusted_text")
+
+
+def read_effect(text: str, measure: PaperMeasure, field: str) -> ReadEffect:
+    """The first effect in a text, one of the measure first; risks, p alone and the like are passed over."""
+    if not text.strip():
+        return ReadEffect(effect=Gap("effect-not-typed"))
+    reading = read_paper(text, measure, field)
+    effects = [
+        figure for figure in reading.figures if figure.measure in EFFECT_MEASURES and figure.estimate is not None
+    ]
+    chosen = next((figure for figure in effects if figure.measure == measure), effects[0] if effects else None)
+    return ReadEffect(effect=Gap("effect-unreadable") if chosen is None else chosen, marks=reading.marks)
+
+
+def as_figure(printed: PrintedFigure) -> Figure | Gap:
+    """Estimate and limits as fractions and ratios, the interval a Gap where two limits are not printed.
+
+    Printed limits in the wrong order are put in order; the field's mark says so.
+    """
+    if printed.estimate is None:
+        return Gap("effect-unreadable")
+    unit = _UNITS[printed.unit]
+    numbers = [number.value / unit for number in (printed.estimate, printed.low, printed.high) if number is not None]
+    if printed.measure not in DIFFERENCES and min(numbers) < 0:
+        return Gap("effect-out-of-range")
+    if printed.measure == "risk_difference" and max(map(abs, numbers)) > 1:
+        return Gap("effect-out-of-range")
+    interval: Interval | Gap = Gap("no-interval-printed")
+    if printed.low is not None and printed.high is not None:
+        interval = Interval(low=min(numbers[1:]), high=max(numbers[1:]))
+    return Figure(estimate=numbers[0], interval=interval, method=PRINTED)

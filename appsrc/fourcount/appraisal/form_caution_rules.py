@@ -1,0 +1,190 @@
+"""When the cautions of single forms of print, and of what stands beside a table, hold."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.case import Case, value
+from fourcount.appraisal.extras.e_values import OBSERVATIONAL
+from fourcount.appraisal.extras.printed import USUAL_LEVEL
+from fourcount.appraisal.findings import Clusters, Fact, Figure, Gap, Losses, PrintedFigure, Recovered, TimedRisks
+
+Facts = dict[str, Fact]
+
+UNLIKE = 0.1
+"""A p of homogeneity below this speaks of unlike strata: such tests find little, so papers often take 10% (common
+practice)."""
+
+
+def strata_part(case: Case) -> tuple[Facts, ...]:
+    """The crude difference or risk ratio is another than the pooled one, which confounding can do."""
+    return _parting(case, ("pooled_risk_difference", "pooled_risk_ratio"))
+
+
+def strata_odds_ratio_parts(case: Case) -> tuple[Facts, ...]:
+    """The crude odds ratio alone is another than the pooled one, which needs no confounding."""
+    return () if strata_part(case) else _parting(case, ("pooled_odds_ratio",))
+
+
+def _parting(case: Case, measures: tuple[str, ...]) -> tuple[Facts, ...]:
+    parts: list[Facts] = []
+    for key in measures:
+        crude, pooled = value(case.figures.get(key.removeprefix("pooled_"))), value(case.figures.get(key))
+        if case.strata is None or key not in case.strata.parting or crude is None or pooled is None:
+            continue
+        parts.append({"measure": key.removeprefix("pooled_"), "crude": crude, "pooled": pooled})
+    return tuple(parts)
+
+
+def strata_unlike(case: Case) -> Facts | None:
+    """The strata's odds ratios differ by more than chance easily explains, so that one pooled figure hides it."""
+    found = None if case.strata is None else case.strata.homogeneity
+    if found is None or isinstance(found, Gap) or found.p >= UNLIKE:
+        return None
+    return {"p": found.p}
+
+
+def no_meta_analysis(case: Case) -> Facts | None:
+    """Strata of one study are pooled; several studies are not to be pooled so."""
+    return {"strata": len(case.strata.strata)} if case.strata is not None and len(case.strata.strata) > 1 else None
+
+
+def follow_up_varied(case: Case) -> Facts | None:
+    """People were followed for different times, so that raw counts are no risks over one time."""
+    return {} if case.outcome.follow_up_varied and not isinstance(case.given, PrintedFigure) else None
+
+
+def losses_overturn(case: Case) -> Facts | None:
+    """If those lost had fared otherwise, the interval would tell something else about no effect."""
+    losses = case.extras.losses
+    if not isinstance(losses, Losses) or not losses.overturned:
+        return None
+    return {
+        "lost": losses.index_lost + losses.reference_lost,
+        "index_lost": losses.index_lost,
+        "reference_lost": losses.reference_lost,
+        "scenarios": ", ".join(losses.overturned),
+    }
+
+
+def randomised_differs(case: Case) -> tuple[Facts, ...]:
+    """A group's people in the table and those lost are not the people randomised."""
+    return tuple(
+        {
+            "group": group.group,
+            "label": group.label,
+            "randomised": group.randomised,
+            "analysed": group.analysed,
+            "lost": 0 if group.lost is None else group.lost,
+        }
+        for group in case.randomised
+    )
+
+
+def cluster_without_icc(case: Case) -> Facts | None:
+    """Clusters were allotted and how alike their people are is not known: no interval and no p."""
+    clusters = case.extras.clusters
+    return {"reason": clusters.key} if isinstance(clusters, Gap) else None
+
+
+def cluster_corrected(case: Case) -> Facts | None:
+    """Intervals and p are those of so many fewer people."""
+    clusters = case.extras.clusters
+    if not isinstance(clusters, Clusters) or clusters.design_effect == 1:
+        return None
+    return {"design_effect": clusters.design_effect, "icc": clusters.icc, "mean_size": clusters.mean_size}
+
+
+def cluster_uncorrected(case: Case) -> Facts | None:
+    """Clusters are spoken of in a form that has no correction for them."""
+    return {} if isinstance(case.extras.clusters, Clusters) else None
+
+
+def before_after(case: Case) -> Facts | None:
+    """Nobody tells what would have happened without the treatment."""
+    return {} if case.outcome.design == "before-after" else None
+
+
+def abstract_only(case: Case) -> Facts | None:
+    """The reader took the numbers from the abstract."""
+    return {} if case.outcome.where == "abstract" else None
+
+
+def events_counted(case: Case) -> Facts | None:
+    """Several events may be one person's: they are not independent, and intervals are too narrow."""
+    return {} if case.outcome.counting == "events" else None
+
+
+def hazard_ratio(case: Case) -> Facts | None:
+    """A hazard ratio is a ratio of rates that is taken to stay the same over time."""
+    printed = case.given if isinstance(case.given, PrintedFigure) else case.extras.adjusted
+    if printed is None or printed.measure != "hazard_ratio" or printed.estimate is None:
+        return None
+    figure = case.figures.get("hazard_ratio")
+    shown = printed.estimate.value if figure is None or isinstance(figure.estimate, Gap) else figure.estimate
+    return {"value": shown}
+
+
+def cannot_be_checked(case: Case) -> Facts | None:
+    """Without counts nothing can be worked out anew."""
+    return {} if isinstance(case.given, PrintedFigure) else None
+
+
+def interval_rebuilt(case: Case) -> Facts | None:
+    """The interval was worked out from the printed p."""
+    recovered, printed = case.extras.recovered, case.given
+    if not isinstance(recovered, Recovered) or not recovered.from_p:
+        return None
+    return {"p": printed.p.value} if isinstance(printed, PrintedFigure) and printed.p is not None else None
+
+
+def printed_level(case: Case) -> Facts | None:
+    """Printed limits keep their own level, which is not the record's."""
+    given, rebuilt = case.given, interval_rebuilt(case) is not None
+    if isinstance(given, TimedRisks):
+        level = given.level
+    elif isinstance(given, PrintedFigure) and given.low is not None and given.high is not None and not rebuilt:
+        level = given.level or USUAL_LEVEL
+    else:
+        return None
+    return None if abs(level - case.choices.level) < 1e-9 else {"level": level, "chosen": case.choices.level}
+
+
+def adjusted_effect(case: Case) -> Facts | None:
+    """An effect outside trials was adjusted, for what the authors measured and no more."""
+    printed, outcome = case.given, case.outcome
+    if not isinstance(printed, PrintedFigure) or outcome.design not in OBSERVATIONAL:
+        return None
+    adjusted_for = " ".join(outcome.adjusted_for_text.split())
+    return {"design": outcome.design, "adjusted_for": adjusted_for} if printed.adjusted or adjusted_for else None
+
+
+def kept_elsewhere(case: Case) -> Facts | None:
+    """A printed effect is taken to hold at a starting risk whose distance from the study's is not known."""
+    carried = case.carried
+    effect = None if carried is None else value(carried.carried)
+    if carried is None or effect is None or not isinstance(case.given, PrintedFigure):
+        return None
+    return {"effect": carried.effect, "value": effect, "baseline": carried.baseline}
+
+
+def adjusted_converted(case: Case) -> Facts | None:
+    """An adjusted odds ratio is converted at one starting risk, which is approximate."""
+    carried, printed = case.carried, case.given
+    if carried is None or carried.effect != "odds_ratio" or not isinstance(printed, PrintedFigure):
+        return None
+    if not printed.adjusted and not case.outcome.adjusted_for_text.strip():
+        return None
+    return {"baseline": carried.baseline}
+
+
+def crude_beside_adjusted(case: Case) -> Facts | None:
+    """Outside trials the paper prints an adjusted effect, and the figures here are crude."""
+    printed, outcome = case.extras.adjusted, case.outcome
+    if printed is None or printed.estimate is None or outcome.design not in OBSERVATIONAL:
+        return None
+    adjusted_for = " ".join(outcome.adjusted_for_text.split())
+    return {"measure": printed.measure, "value": printed.estimate.value, "adjusted_for": adjusted_for}
+
+
+def concordant_unknown(case: Case) -> Facts | None:
+    """Only the discordant pairs are typed, so that nothing but the odds ratio follows."""
+    return {} if isinstance(case.given, Gap) and isinstance(case.figures.get("pair_odds_ratio"), Figure) else None

@@ -1,0 +1,27 @@
+"""The findings of a table that says nothing yet, or nothing in its design."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable
+
+from fourcount.appraisal.findings import Gap, Mark, OutcomeFindings, Totals
+from fourcount.record.outcome import Form
+
+
+def nothing_yet(
+    gap: Gap, *, form: Form, measures: Iterable[str], totals: Totals | None = None, marks: tuple[Mark, ...] = ()
+) -> OutcomeFindings:
+    """Every figure is withheld for one and the same reason."""
+    return OutcomeFindings(
+        form=form,
+        counts=gap,
+        given=gap,
+        totals=totals or Totals(),
+        marks=marks,
+        measures=dict.fromkeys(measures, gap),
+        test=gap,
+        conversion=gap,
+        patient=gap,
+        cautions=(),
+        strata=gap if form == "strata" else None,
+    )

@@ -1,0 +1,138 @@
+"""What follows from events and person-time."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.case import Case
+from fourcount.appraisal.cautions import cautions_for
+from fourcount.appraisal.clusters import ReadClusters, clusters_of
+from fourcount.appraisal.extras.attributable import of_exposed
+from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
+from fourcount.appraisal.extras.printed import adjusted_of
+from fourcount.appraisal.findings import (
+    RATE_MEASURES,
+    Extras,
+    Figure,
+    Gap,
+    Interval,
+    OutcomeFindings,
+    Probability,
+    Rates,
+    Totals,
+)
+from fourcount.appraisal.forms.nothing_yet import nothing_yet
+from fourcount.appraisal.gating import withheld_of_rates
+from fourcount.appraisal.postponing import RATES_NEED_NUMPY, Pace
+from fourcount.record.entry.person_time import read_person_time
+from fourcount.record.entry.readings import GroupRate, PersonTimeReading
+from fourcount.record.outcome import Outcome, PersonTime
+from fourcount.record.paper import Choices
+from fourcount.stats import rates as stats
+from fourcount.stats.methods import RATE_FAMILIES, method, test
+
+
+def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
+    """Both rates, their difference and ratio. Person-time has events alone, so that nothing else can be counted."""
+    table = outcome.table
+    reading = read_person_time(table) if isinstance(table, PersonTime) else _BLANK
+    clusters, adjusted = clusters_of(outcome), adjusted_of(outcome)
+    marks = reading.marks + clusters.marks + adjusted.marks
+    totals = _totals(reading)
+    rates = _rates(reading, outcome)
+    if isinstance(rates, Gap):
+        return nothing_yet(rates, form="person-time", measures=RATE_MEASURES, totals=totals, marks=marks)
+    withheld = withheld_of_rates(outcome.design)
+    figures = {} if withheld else _figures(rates, choices, pace, clusters)
+    nothing = Gap(withheld["rate_ratio"]) if withheld else Gap("carried-later")
+    probability = nothing if withheld else _test(rates, choices, pace, clusters)
+    ratio = figures.get("rate_ratio")
+    extras = Extras(
+        e_value=e_values(ratio, "rate_ratio", common=False) if ratio and outcome.design in OBSERVATIONAL else None,
+        attributable_exposed=of_exposed(ratio) if ratio and outcome.design == "cohort" else None,
+        clusters=clusters.clusters,
+        adjusted=adjusted.figure,
+    )
+    case = Case(
+        outcome=outcome,
+        form="person-time",
+        given=rates,
+        choices=choices,
+        figures=figures,
+        test=probability,
+        conversion=nothing,
+        patient=nothing,
+        marks=marks,
+        extras=extras,
+    )
+    return OutcomeFindings(
+        form="person-time",
+        counts=Gap("not-counts"),
+        given=rates,
+        totals=totals,
+        marks=marks,
+        measures={key: Gap(withheld[key]) if key in withheld else _measure(figures[key]) for key in RATE_MEASURES},
+        test=probability,
+        conversion=nothing,
+        patient=nothing,
+        cautions=cautions_for(case),
+        extras=extras,
+    )
+
+
+_BLANK = PersonTimeReading(first=GroupRate(), second=GroupRate())
+
+
+def _rates(reading: PersonTimeReading, outcome: Outcome) -> Rates | Gap:
+    if any(not mark.used for mark in reading.marks):
+        return Gap("unreadable")
+    first_is_index = outcome.index_group == "first"
+    index, reference = (reading.first, reading.second) if first_is_index else (reading.second, reading.first)
+    if index.events is None or index.time is None or reference.events is None or reference.time is None:
+        return Gap("not-typed")
+    return Rates(
+        index_events=index.events,
+        index_time=index.time,
+        reference_events=reference.events,
+        reference_time=reference.time,
+    )
+
+
+def _totals(reading: PersonTimeReading) -> Totals:
+    first, second = reading.first.events, reading.second.events
+    left = None if first is None or second is None else first + second
+    return Totals(first_left=first, second_left=second, left=left)
+
+
+def _figures(rates: Rates, choices: Choices, pace: Pace, clusters: ReadClusters) -> dict[str, Figure]:
+    family, level = RATE_FAMILIES[choices.family], choices.level
+
+    def figure(measure: str, key: str, estimate: float | Gap, *arguments: object) -> Figure:
+        interval: Interval | Gap
+        if clusters.elsewhere is not None:
+            interval = clusters.elsewhere
+        elif pace.without_numpy and key in RATES_NEED_NUMPY:
+            interval = Gap("follows")
+        else:
+            interval = method(measure, key).interval(*arguments, level)
+        return Figure(estimate=estimate, interval=interval, method=key)
+
+    index, reference = (rates.index_events, rates.index_time), (rates.reference_events, rates.reference_time)
+    return {
+        "rate_index": figure("rate", family.rate, stats.rate(*index), *index),
+        "rate_reference": figure("rate", family.rate, stats.rate(*reference), *reference),
+        "rate_difference": figure("rate_difference", family.difference, stats.rate_difference(rates), rates),
+        "rate_ratio": figure("rate_ratio", family.ratio, stats.rate_ratio(rates), rates),
+    }
+
+
+def _measure(figure: Figure) -> Figure | Gap:
+    if isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap):
+        return figure.estimate
+    return figure
+
+
+def _test(rates: Rates, choices: Choices, pace: Pace, clusters: ReadClusters) -> Probability:
+    key = RATE_FAMILIES[choices.family].test
+    if clusters.elsewhere is not None:
+        return Probability(p=clusters.elsewhere, method=key)
+    postponed = pace.without_numpy and key in RATES_NEED_NUMPY
+    return Probability(p=Gap("follows") if postponed else test(key).p(rates), method=key)

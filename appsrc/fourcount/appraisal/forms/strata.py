@@ -1,0 +1,189 @@
+"""What follows from several strata: each of them, all thrown together, and pooled."""
+
+from __future__ import annotations
+
+from dataclasses import replace
+
+from fourcount.appraisal.case import Case
+from fourcount.appraisal.cautions import cautions_for
+from fourcount.appraisal.clusters import clusters_of
+from fourcount.appraisal.conversion import converted_figure
+from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
+from fourcount.appraisal.extras.of_counts import outcome_is_common
+from fourcount.appraisal.extras.printed import adjusted_of
+from fourcount.appraisal.findings import (
+    MEASURES,
+    AnyNumberNeeded,
+    Conversion,
+    Counts,
+    Extras,
+    Figure,
+    Gap,
+    OutcomeFindings,
+    PatientFindings,
+    StrataFindings,
+    StratumFindings,
+)
+from fourcount.appraisal.forms.nothing_yet import nothing_yet
+from fourcount.appraisal.gating import Support, support_of
+from fourcount.appraisal.measures import Table, all_figures, measures, own_test
+from fourcount.appraisal.patient import carry_effect
+from fourcount.appraisal.pooling import cmh, homogeneity, parting, pooled_figures
+from fourcount.appraisal.postponing import NOTHING, Pace, postponed
+from fourcount.appraisal.starting_risk import StartingRisk, Typed, marks_of, typed_risk
+from fourcount.appraisal.table import oriented, totals_of
+from fourcount.record.entry.readings import GroupCounts, Proportion, StratumReading, TableReading, Unreadable
+from fourcount.record.entry.strata import read_strata
+from fourcount.record.outcome import Effect, Outcome, Strata
+from fourcount.record.paper import Choices
+
+WITHIN = ("risk_index", "risk_reference", "risk_difference", "risk_ratio", "odds_ratio")
+"""The measures of a single stratum."""
+
+Measure = Figure | AnyNumberNeeded | Gap
+
+
+def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
+    """Crude measures of all strata together beside the pooled ones; blank rows are left out."""
+    readings = read_strata(outcome.table) if isinstance(outcome.table, Strata) else ()
+    typed, clusters, adjusted = typed_risk(outcome), clusters_of(outcome), adjusted_of(outcome)
+    marks = tuple(mark for reading in readings for mark in reading.marks)
+    marks += marks_of(typed) + clusters.marks + adjusted.marks
+    used = [(place, reading) for place, reading in enumerate(readings) if not reading.blank]
+    found = [_counts(reading, outcome) for _, reading in used]
+    totals = totals_of(_summed([reading for _, reading in used]))
+    gap = next((one for one in found if isinstance(one, Gap)), None if found else Gap("not-typed"))
+    if gap is not None:
+        worst = Gap("unreadable") if Gap("unreadable") in found else gap
+        return nothing_yet(worst, form="strata", measures=MEASURES, totals=totals, marks=marks)
+    strata = tuple(one for one in found if isinstance(one, Counts))
+    counts, support = _together(strata), support_of(outcome)
+    later = postponed(counts, choices, pace.loaded) if pace.deferring else NOTHING
+    table = Table(counts=counts, choices=choices, postponed=later, behind=clusters.elsewhere)
+    crude = all_figures(table, support)
+    labels = [reading.label or str(place + 1) for place, reading in used]
+    parts = _strata(strata, labels, table, crude, support)
+    pooled = {} if isinstance(parts, Gap) else _given(parts)
+    conversion, patient = _for_a_patient(pooled, outcome, support, typed)
+    test = Gap(support.refused) if support.refused else own_test(table)
+    measure = "odds_ratio" if outcome.design == "case-control" else "risk_ratio"
+    extras = Extras(
+        e_value=e_values(pooled[f"pooled_{measure}"], measure, common=outcome_is_common(outcome, counts))
+        if outcome.design in OBSERVATIONAL and f"pooled_{measure}" in pooled
+        else None,
+        clusters=clusters.clusters,
+        adjusted=adjusted.figure,
+    )
+    case = Case(
+        outcome=outcome,
+        form="strata",
+        given=counts,
+        choices=choices,
+        figures={**crude, **pooled},
+        test=test,
+        conversion=conversion,
+        patient=patient,
+        marks=marks,
+        extras=extras,
+        strata=None if isinstance(parts, Gap) else parts,
+    )
+    return OutcomeFindings(
+        form="strata",
+        counts=counts,
+        given=counts,
+        totals=totals,
+        marks=marks,
+        measures=measures(crude, support, welcome=outcome.welcome),
+        test=test,
+        conversion=conversion,
+        patient=patient,
+        cautions=cautions_for(case),
+        strata=parts,
+        extras=extras,
+    )
+
+
+def _counts(reading: StratumReading, outcome: Outcome) -> Counts | Gap:
+    return oriented(TableReading(first=reading.first, second=reading.second, marks=reading.marks), outcome)
+
+
+def _together(strata: tuple[Counts, ...]) -> Counts:
+    """All strata thrown together, as if they were one table."""
+    return Counts(
+        index_events=sum(one.index_events for one in strata),
+        index_non_events=sum(one.index_non_events for one in strata),
+        reference_events=sum(one.reference_events for one in strata),
+        reference_non_events=sum(one.reference_non_events for one in strata),
+    )
+
+
+def _summed(readings: list[StratumReading]) -> TableReading:
+    """The sums of the strata's counts in the print's order, as far as all are known."""
+    first, second = ([getattr(reading, side) for reading in readings] for side in ("first", "second"))
+    return TableReading(first=_sum_of(first), second=_sum_of(second))
+
+
+def _sum_of(groups: list[GroupCounts]) -> GroupCounts:
+    sums: dict[str, int | None] = {}
+    for name in ("left", "right", "total"):
+        values = [getattr(group, name) for group in groups]
+        sums[name] = None if not values or any(value is None for value in values) else sum(values)
+    return GroupCounts(**sums)
+
+
+def _strata(
+    strata: tuple[Counts, ...], labels: list[str], table: Table, crude: dict[str, Figure], support: Support
+) -> StrataFindings | Gap:
+    if support.refused:
+        return Gap(support.refused)
+    pooled = pooled_figures(strata, table.choices.level, support, without=table.behind)
+    return StrataFindings(
+        strata=tuple(
+            StratumFindings(label=label, counts=counts, measures=_within(replace(table, counts=counts), support))
+            for label, counts in zip(labels, strata, strict=True)
+        ),
+        pooled=pooled,
+        test=cmh(strata, without=table.behind),
+        homogeneity=homogeneity(strata, without=table.behind),
+        parting=parting(crude, pooled),
+    )
+
+
+def _within(table: Table, support: Support) -> dict[str, Measure]:
+    figures = all_figures(table, support, only=WITHIN)
+    found: dict[str, Measure] = {}
+    for key in WITHIN:
+        figure = figures.get(key)
+        if figure is None:
+            found[key] = Gap(support.withheld[key])
+        elif isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap):
+            found[key] = figure.estimate
+        else:
+            found[key] = figure
+    return found
+
+
+def _given(strata: StrataFindings) -> dict[str, Figure]:
+    return {key: figure for key, figure in strata.pooled.items() if isinstance(figure, Figure)}
+
+
+def _for_a_patient(
+    pooled: dict[str, Figure], outcome: Outcome, support: Support, typed: Typed
+) -> tuple[Conversion | Gap, PatientFindings | Gap]:
+    """The pooled effect at a typed starting risk. Each stratum has a risk of its own, so none is taken from here."""
+    if support.refused:
+        return Gap(support.refused), Gap(support.refused)
+    if not isinstance(typed, Proportion):
+        gap = Gap("baseline-unreadable" if isinstance(typed, Unreadable) else "strata-need-baseline")
+        return gap, gap
+    start = StartingRisk(value=typed.value, origin="given")
+    odds_ratio = pooled.get("pooled_odds_ratio")
+    conversion: Conversion | Gap = Gap("carried-gap")
+    if odds_ratio is not None:
+        ratio = converted_figure(odds_ratio, start.value)
+        conversion = Conversion(baseline=start.value, baseline_from="given", risk_ratio=ratio)
+    effect: Effect = support.effect(outcome.patient.effect)
+    carried = pooled.get(f"pooled_{effect}")
+    if carried is None:
+        return conversion, Gap("carried-gap")
+    return conversion, carry_effect(carried, start, effect, support, welcome=outcome.welcome)
