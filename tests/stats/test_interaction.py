@@ -113,3 +113,19 @@ def test_a_difference_without_width_is_a_reason() -> None:
     sound, flat = (0.1, 0.05, 0.15), (0.1, 0.1, 0.1)
     assert difference_of_differences(sound, flat, 0.95) == Gap("zero-width")
     assert difference_of_differences(flat, sound, 0.95) == Gap("zero-width")
+
+
+WIDE = st.floats(1e-300, 1e300)
+ANY_ESTIMATE = st.tuples(WIDE, WIDE, WIDE).map(sorted).map(lambda t: (t[1], t[0], t[2]))
+
+
+@given(ANY_ESTIMATE, ANY_ESTIMATE, LEVEL)
+def test_every_two_ratios_have_an_answer(first: Estimate, second: Estimate, level: float) -> None:
+    """From one end of the doubles to the other: limits in order, 0 and infinity allowed, never nan, or a gap."""
+    found = ratio_of_ratios(first, second, level)
+    if isinstance(found, Gap):
+        assert found == Gap("zero-width")
+    else:
+        assert 0 <= found.low <= found.high
+        assert 0 <= found.p <= 1
+        assert math.isfinite(found.z)

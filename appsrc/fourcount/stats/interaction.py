@@ -5,6 +5,7 @@ from __future__ import annotations
 import math
 from dataclasses import dataclass
 
+from fourcount.stats.log_scale import exponential
 from fourcount.stats.normal import quantile, two_sided_p
 from fourcount.stats.recovery import from_limits
 from fourcount.stats.results import Gap
@@ -50,15 +51,14 @@ def ratio_of_ratios(first: Estimate, second: Estimate, level_of_both: float) -> 
     if isinstance(two, Gap):
         return two
     error = math.hypot(one.standard_error, two.standard_error)
-    ratio = first[0] / second[0]
-    z = (math.log(first[0]) - math.log(second[0])) / error
+    log_ratio = math.log(first[0]) - math.log(second[0])
     reach = quantile(level_of_both) * error
     return Interaction(
-        ratio=ratio,
-        low=ratio * math.exp(-reach),
-        high=ratio * math.exp(reach),
-        z=z,
-        p=two_sided_p(z),
+        ratio=first[0] / second[0],
+        low=exponential(log_ratio - reach),
+        high=exponential(log_ratio + reach),
+        z=log_ratio / error,
+        p=two_sided_p(log_ratio / error),
         standard_error=error,
     )
 

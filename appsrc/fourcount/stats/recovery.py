@@ -9,6 +9,7 @@ from __future__ import annotations
 import math
 from dataclasses import dataclass
 
+from fourcount.stats.log_scale import exponential
 from fourcount.stats.normal import quantile, two_sided_p, z_of_p
 from fourcount.stats.results import Gap, Interval
 
@@ -82,7 +83,7 @@ def _interval(estimate: float, p: float, level: float, log_scale: bool, *, appro
         return Gap("estimate-at-no-effect")
     reach = quantile(level) * abs(centre) / z
     if log_scale:
-        return Interval(low=_exp(centre - reach), high=_exp(centre + reach))
+        return Interval(low=exponential(centre - reach), high=exponential(centre + reach))
     return Interval(low=centre - reach, high=centre + reach)
 
 
@@ -94,7 +95,3 @@ def _unsound(values: tuple[float, ...], log_scale: bool) -> Gap | None:
 
 def _on_scale(value: float, log_scale: bool) -> float:
     return math.log(value) if log_scale else value
-
-
-def _exp(value: float) -> float:
-    return math.exp(value) if value < 709.0 else math.inf

@@ -12,6 +12,7 @@ import math
 from collections.abc import Sequence
 
 from fourcount.stats.homogeneity import breslow_day, breslow_day_tarone
+from fourcount.stats.log_scale import limits_around
 from fourcount.stats.normal import quantile, two_sided_p
 from fourcount.stats.results import Counts, Gap, Interval
 from fourcount.stats.strata_sums import cross_products, excess, informative, nothing_to_compare, with_both_groups
@@ -29,8 +30,6 @@ __all__ = [
     "robins_breslow_greenland",
     "sato_difference",
 ]
-
-_LARGEST_LOG = 709.0  # of what exp still gives
 
 
 def pooled_odds_ratio(strata: Sequence[Counts]) -> float | Gap:
@@ -211,8 +210,8 @@ def _spread(compared: Sequence[Counts]) -> float:
 
 def _around_ratio(centre: float, log_half_width: float) -> Interval | Gap:
     """Limits beyond the range of doubles (strata of 10^9 that contradict each other) are 0 and ``inf``."""
-    high = centre * math.exp(log_half_width) if log_half_width < _LARGEST_LOG else math.inf
-    return _with_width(centre * math.exp(-log_half_width), high)
+    found = limits_around(centre, log_half_width)
+    return _with_width(found.low, found.high)
 
 
 def _around_difference(centre: float, variance: float, level: float) -> Interval | Gap:

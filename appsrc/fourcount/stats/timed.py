@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import math
 
+from fourcount.stats.log_scale import exponential
 from fourcount.stats.results import Gap, Interval, LimitedRisk, TimedRisks
 
 
@@ -58,7 +59,7 @@ def square_and_add_ratio(timed: TimedRisks, level: float | None = None) -> Inter
     above = math.hypot(_log_ratio(one.high, one.risk), _log_ratio(two.risk, two.low))
     if below == 0.0 and above == 0.0:
         return Gap("zero-width")
-    return Interval(low=ratio * math.exp(-below), high=ratio * math.exp(above) if above < 700.0 else math.inf)
+    return Interval(low=ratio * math.exp(-below), high=ratio * exponential(above))
 
 
 def _log_ratio(greater: float, lesser: float) -> float:

@@ -1,4 +1,4 @@
-"""What pools several tables of one outcome, and the tests of several tables. R, S, P, Q are sums' parts, see each."""
+"""What pools several tables of one outcome, and the tests of several tables; Σ adds up over the strata."""
 
 from __future__ import annotations
 
