@@ -61,6 +61,20 @@ STAND_INS = {
     "high": "the upper one",
     "estimate": "the estimate",
     "p": "it",
+    "level": "its own",
+    "chosen": "another",
+    "reason": "Intervals that take people of one cluster for independent are too narrow.",
+    "scenarios": "some scenarios",
+    "adjusted_for": "",
+    "lost": "Some",
+    "randomised": "some",
+    "analysed": "others",
+    "design_effect": "clusters",
+    "icc": "as typed",
+    "mean_size": "as typed",
+    "crude": "one figure",
+    "pooled": "another",
+    "strata": "several",
     "side": "one side",
     "label": "comparison",
 }
@@ -117,9 +131,31 @@ def _design_name(key: str) -> str:
     return labels.DESIGNS.get(key, key)
 
 
-NUMERIC = frozenset({"typed", "total", "baseline", "study", "risk", "odds_ratio", "risk_ratio", "value", "count"})
+NUMERIC = frozenset(
+    {
+        "p",
+        "level",
+        "chosen",
+        "icc",
+        "mean_size",
+        "typed",
+        "total",
+        "baseline",
+        "study",
+        "risk",
+        "odds_ratio",
+        "risk_ratio",
+        "value",
+        "count",
+    }
+)
 WRITERS: dict[str, Callable[..., str]] = {
     "typed": numbers.quantity,
+    "icc": numbers.quantity,
+    "mean_size": numbers.quantity,
+    "p": numbers.p_value,
+    "level": numbers.level,
+    "chosen": numbers.level,
     "total": numbers.quantity,
     "baseline": numbers.percent_given,
     "study": numbers.percent,
