@@ -7,9 +7,10 @@ from collections.abc import Callable
 from typing import TYPE_CHECKING
 
 import pytest
+from PySide6.QtGui import QGuiApplication
 
 from fourcount.appraisal.appraise import appraise
-from fourcount.record.outcome import CELLS, EventsOfTotal
+from fourcount.record.outcome import CELLS, FORMS, Outcome, Strata, form_of
 from fourcount.record.paper import Record
 
 if TYPE_CHECKING:
@@ -17,18 +18,19 @@ if TYPE_CHECKING:
 
 TYPED = ["0", "7", "38", "374", "1,204", "38/412", "38 (9.2%)", "-3", "4.5", "abc", "12%", "0.12", "", " ", "<b>", "=1+1", "1000000000", "999999999999"]  # fmt: skip  # noqa: E501
 COMMANDS = [
-    "new", "example", "undo", "redo", "copy-text", "copy-table", "copy-picture", "swap", "count-other", "form",
-    "layout", "first-cell", "baseline", "clear", "bigger", "smaller", "actual", "bars", "more",
+    "new", "example", "undo", "redo", "copy-text", "copy-table", "copy-picture", "swap", "count-other",
+    "layout", "first-cell", "baseline", "clear", "bigger", "smaller", "actual", "bars", "more", "paste", "paper",
+    "add-row", "remove-row", "adopt", *(f"form-{form}" for form in FORMS),
 ]  # fmt: skip
+PASTED = ["", "38", "38/412\n70/409", "38 374\n70 339", "0.54 (0.37 to 0.78)", "38 of 412 fell with A and 70 of 409 with B"]  # fmt: skip  # noqa: E501
 
 
 def write_somewhere(hands: Hands, chance: random.Random) -> None:
     """Type something into a field on screen."""
-    window, grid = hands.window, hands.window.printed.grid
+    window = hands.window
     fields = [
-        *grid.cells.values(), *grid.cells.values(), *grid.labels.values(), *grid.headings.values(),
-        window.patient.baseline, window.patient.source, window.printed.event_words, window.printed.span,
-        window.header.title, window.header.source,
+        *(field for field in window.printed.fields if field.isVisible()), window.patient.baseline,
+        window.patient.source, window.header.title, window.header.source,
     ]  # fmt: skip
     hands.write(chance.choice(fields), chance.choice(TYPED))
 
@@ -40,8 +42,16 @@ def choose_something(hands: Hands, chance: random.Random) -> None:
         window.printed.design, window.printed.welcome, window.printed.form, window.printed.layout_choice,
         window.says.family, window.patient.effect,
     ]  # fmt: skip
-    box = chance.choice([box for box in boxes if box.isEnabled()])
+    box = chance.choice([box for box in boxes if box.isEnabled() and box.isVisible()])
     hands.choose(box, box.itemText(chance.choice([0, box.count() - 1])))
+
+
+def open_something(hands: Hands, chance: random.Random) -> None:
+    """Press one of the quiet links, where they are."""
+    optional = hands.window.printed.rare.optional
+    links = [link for link in optional.links.values() if link.isVisible()] if optional else []
+    if links:
+        hands.click(chance.choice(links))
 
 
 def press_something(hands: Hands, chance: random.Random) -> None:
@@ -51,27 +61,40 @@ def press_something(hands: Hands, chance: random.Random) -> None:
 
 def give_command(hands: Hands, chance: random.Random) -> None:
     """Give a command by its menu, whether it has something to do or not."""
+    QGuiApplication.clipboard().setText(chance.choice(PASTED))
     hands.window.actions_by_key[chance.choice(COMMANDS)].trigger()
 
 
-ACTIONS: list[Callable[..., None]] = [write_somewhere, choose_something, press_something, give_command]
+ACTIONS: list[Callable[..., None]] = [write_somewhere, choose_something, press_something, give_command, open_something]
+
+
+def text_of(outcome: Outcome, field: str) -> str:
+    """What the record holds for a field on screen."""
+    if field.startswith("strata."):
+        assert isinstance(outcome.table, Strata)
+        _, place, name = field.split(".")
+        return str(getattr(outcome.table.strata[int(place)], name))
+    return str(getattr(outcome.table, field, None) if hasattr(outcome.table, field) else getattr(outcome, field))
 
 
 def assert_shown(hands: Hands) -> None:
     """Everything on screen is what the session's record says."""
     session, window = hands.window.session, hands.window
     outcome = session.outcome
-    assert hands.texts == tuple(getattr(outcome.table, field) for field in CELLS)
+    for field in window.printed.fields:
+        if field.isVisible():
+            assert field.text() == text_of(outcome, field.field)
     assert window.header.title.text() == session.record.title_text
     assert window.printed.event_words.text() == outcome.event_words_text
     assert window.printed.design.currentData() == outcome.design
-    assert (window.printed.form.currentData() == "events-of-total") == isinstance(outcome.table, EventsOfTotal)
+    assert window.printed.form.currentData() == form_of(outcome.table)
     assert window.patient.baseline.text() == outcome.patient.starting_risk_text
     assert window.says.family.currentData() == session.record.choices.family
     assert session.findings is not None
-    assert {field for field, cell in window.printed.grid.cells.items() if cell.marked} == {
-        mark.field for mark in session.findings.marks if mark.field in CELLS
-    }
+    if window.printed.grid.isVisible():
+        assert {field for field, cell in window.printed.grid.cells.items() if cell.marked} == {
+            mark.field for mark in session.findings.marks if mark.field in CELLS
+        }
     assert "nan" not in str(hands.rows).lower().replace("n-1", "")
 
 

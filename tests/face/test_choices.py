@@ -162,7 +162,7 @@ def test_the_form_of_print_converts_the_counts(example: Hands, how: str) -> None
     """38 · 374 becomes 38 of 412 with the same figures, and comes back."""
     rows, form = example.rows, example.window.printed.form
     if how == "key":
-        example.do("form")
+        example.do("form-events-of-total")
     else:
         example.choose(form, "38 of 412")
     assert form.currentText() == "38 of 412"
@@ -170,7 +170,7 @@ def test_the_form_of_print_converts_the_counts(example: Hands, how: str) -> None
     assert example.texts == ("38", "412", "70", "409")
     assert example.rows == rows
     if how == "key":
-        example.do("form")
+        example.do("form-events-and-others")
     else:
         example.choose(form, "38 · 374")
     assert example.texts == ("38", "374", "70", "339")
@@ -180,7 +180,7 @@ def test_the_form_of_print_converts_the_counts(example: Hands, how: str) -> None
 
 def test_counts_of_totals_are_typed_as_printed(hands: Hands) -> None:
     """In the form 38 of 412 the second column takes everybody, and the others are worked out beside it."""
-    hands.do("form")
+    hands.do("form-events-of-total")
     hands.count("38", "412", "70", "409")
     totals = hands.window.printed.grid.totals
     assert hands.rows["risk_ratio"].startswith("Risk ratio: 0.54")
@@ -190,7 +190,7 @@ def test_counts_of_totals_are_typed_as_printed(hands: Hands) -> None:
 
 def test_more_events_than_people_are_marked_in_that_form(hands: Hands) -> None:
     """500 of 412 cannot be."""
-    hands.do("form")
+    hands.do("form-events-of-total")
     hands.count("500", "412", "70", "409")
     assert hands.notes == ["500: more events than people; the events have to fit into the total"]
 
@@ -198,7 +198,7 @@ def test_more_events_than_people_are_marked_in_that_form(hands: Hands) -> None:
 def test_an_unreadable_row_keeps_its_text_in_another_form(hands: Hands) -> None:
     """What could not be converted is left as it was typed."""
     hands.count("38", "374", "abc", "339")
-    hands.do("form")
+    hands.do("form-events-of-total")
     assert hands.texts == ("38", "412", "abc", "339")
 
 

@@ -111,13 +111,16 @@ def test_tab_into_a_cell_selects_its_count(example: Hands) -> None:
 
 def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) -> None:
     """From the title to the cautions, left to right and top to bottom, each control once."""
-    window, grid = example.window, example.window.printed.grid
+    window, grid, rare = example.window, example.window.printed.grid, example.window.printed.rare
+    assert rare.optional
+    assert rare.check
     expected = [
         window.header.title, window.header.source, window.printed.design, window.printed.name,
         window.printed.welcome, window.printed.event_words, window.printed.span,
         window.printed.form, window.printed.layout_choice,
         grid.headings["left"], grid.headings["right"], grid.labels["first"], grid.labels["second"],
-        *grid.cells.values(), *window.printed.links, *(example.row(key) for key in (*MEASURES, "test")),
+        *grid.cells.values(), *window.printed.links, *rare.optional.links.values(), rare.check.paper.measure,
+        rare.check.paper.text, *(example.row(key) for key in (*MEASURES, "test")),
         window.says.family, window.says.level, window.says.more, window.says.help, *window.says.copies,
         window.patient.baseline, window.patient.source, window.patient.effect, window.patient.copy, window.cautions,
     ]  # fmt: skip
@@ -198,12 +201,11 @@ def test_what_has_the_focus_is_in_view(example: Hands) -> None:
     assert not example.focus.visibleRegion().isEmpty()
 
 
-def test_a_pasted_block_loses_nothing(hands: Hands) -> None:
-    """Several lines pasted into one cell stay there, marked, until somebody takes them apart."""
-    QGuiApplication.clipboard().setText("38 374\n70 339")
+def test_a_pasted_text_without_a_table_loses_nothing(hands: Hands) -> None:
+    """What is no table stays in the cell as it was pasted, marked, until somebody takes it apart."""
+    QGuiApplication.clipboard().setText("38 or so of the 374")
     hands.press("Ctrl+V")
-    assert "38" in hands.texts[0]
-    assert "339" in hands.texts[0]
+    assert hands.texts[0] == "38 or so of the 374"
     assert hands.window.printed.grid.cells[CELLS[0]].marked
 
 

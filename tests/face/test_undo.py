@@ -89,7 +89,7 @@ def test_ten_steps_back_and_forth_return_to_the_same_record(hands: Hands) -> Non
     hands.write(grid.labels["first"], "Night lights")
     hands.write(window.printed.span, "12 months")
     hands.do("swap")
-    hands.do("form")
+    hands.do("form-events-of-total")
     hands.choose(window.printed.design, "cohort study")
     hands.write(window.patient.baseline, "12%")
     record, rows, texts = window.session.record, hands.rows, hands.texts
@@ -195,7 +195,7 @@ def test_clearing_an_empty_table_is_no_step(hands: Hands) -> None:
 def test_choices_are_steps(example: Hands) -> None:
     """A swap, a form and a family are each taken back by one undo."""
     rows = example.rows
-    for command in ("swap", "count-other", "form", "layout"):
+    for command in ("swap", "count-other", "form-events-of-total", "layout"):
         example.do(command)
         example.do("undo")
         assert example.rows == rows
