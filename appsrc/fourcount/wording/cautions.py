@@ -30,6 +30,10 @@ RATIO_KEPT_CONSTANT = (
 SAID_OF_THE_PATIENT = ("baseline-uncertain",)
 """The cautions that the patient's own words say already, wherever both stand together."""
 
+MATCHED = (
+    "The pairs are alike in what they were matched for; other differences between cases and controls may explain the "
+    "odds ratio."
+)
 SCENARIOS = {
     "none": "if none of them had the event",
     "all": "if all of them had it",
@@ -51,7 +55,9 @@ def caution_text(caution: Caution) -> str:
         return told(HALF_ADDED_TO_A_RATIO, caution.facts)
     if caution.key == "effect-kept-constant" and caution.facts.get("effect") != "odds_ratio":
         return told(RATIO_KEPT_CONSTANT, caution.facts)
-    return told(TEXTS.get(caution.key, UNKNOWN)[1], {**caution.facts, **_said(caution)})
+    if caution.key == "observational" and caution.facts.get("design") == "matched":
+        return MATCHED
+    return told(TEXTS.get(caution.key, UNKNOWN)[1], caution.facts, _said(caution))
 
 
 def caution_title(caution: Caution) -> str:
@@ -59,10 +65,10 @@ def caution_title(caution: Caution) -> str:
     return TEXTS.get(caution.key, UNKNOWN)[0]
 
 
-def _said(caution: Caution) -> dict[str, Fact]:
+def _said(caution: Caution) -> dict[str, str]:
     """Facts whose words depend on the caution, or on another fact, rather than on their own name."""
     facts = caution.facts
-    said: dict[str, Fact] = {}
+    said: dict[str, str] = {}
     if "reason" in facts:
         said["reason"] = gap_text(Gap(str(facts["reason"])))
     if "scenarios" in facts:

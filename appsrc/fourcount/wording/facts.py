@@ -7,6 +7,7 @@ never an exception: a sentence with a hole still says more than none.
 from __future__ import annotations
 
 from collections.abc import Callable, Mapping
+from types import MappingProxyType
 
 from fourcount.wording import labels, numbers
 
@@ -80,9 +81,11 @@ STAND_INS = {
 }
 
 
-def told(template: str, facts: Mapping[str, Fact]) -> str:
-    """The template with its facts in their places."""
-    return template.format_map(_Written(facts))
+def told(template: str, facts: Mapping[str, Fact], said: Mapping[str, str] = MappingProxyType({})) -> str:
+    """The template with its facts in their places; ``said`` are facts that are words already, put in as they are."""
+    written = _Written(facts)
+    written.update(said)
+    return template.format_map(written)
 
 
 def quoted(text: str) -> str:

@@ -74,7 +74,7 @@ GAP_TEXTS = {
     "or odds ratio with a starting risk, can be.",
     "no-losses": "Nobody is said to be lost; type how many of each group were.",
     "losses-unreadable": "A number lost, or the ratio of risks among the lost, cannot be read.",
-    "clusters-not-here": "Intervals of this figure cannot be widened for clusters here; counts of both groups can be.",
+    "clusters-not-here": "Nothing here corrects this figure for clusters, so it is not given.",
     "losses-of-one-group": "Type how many were lost in each of the two groups; one of them is not known.",
     "effect-out-of-range": "A printed ratio cannot be below 0, nor a difference beyond 100 in 100; check the print.",
     "effect-needs-baseline": "Type a starting risk: a printed effect alone holds none.",

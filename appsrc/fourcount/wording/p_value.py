@@ -6,10 +6,12 @@ from fourcount.appraisal.findings import Gap, Homogeneity, OutcomeFindings, Prob
 from fourcount.record.outcome import Form
 from fourcount.stats.methods import homogeneity_test, test
 from fourcount.wording import numbers
+from fourcount.wording.form import NO_COUNTS
 from fourcount.wording.gaps import gap_text
 
 NO_P = "There is no p: "
 P_FOLLOWS = "The p value takes a moment and will follow."
+NO_TEST = "Two printed risks have no p of their own; the interval of their difference tells as much."
 NOT_THE_SIZE = "It does not say how large the effect is; the intervals do."
 NO_ASSOCIATION = "no association"
 TESTED: dict[Form, str] = {
@@ -20,7 +22,7 @@ TESTED: dict[Form, str] = {
 WITH = " with "
 EQUAL_RATES = " of equal rates"
 BY_TEST = "{p} by the {title} of {tested}, two-sided."
-RECOVERED = "{p}, two-sided, as the printed figures have it on the normal scale."
+RECOVERED = "{p}, two-sided, worked out from the printed figures alone."
 ONE_FOR_ALL = (
     "Whether one odds ratio may hold in all strata: {p} by the {title} (chi-square {chi_square} on {degrees}). "
     "A small p speaks against it; a large one does not show it."
@@ -38,7 +40,7 @@ def p_sentence(findings: OutcomeFindings) -> str:
     """The p of the family's own test with the test's name, and what it does not say."""
     probability = own_p(findings)
     if isinstance(probability, Gap):
-        return gap_text(probability)
+        return NO_TEST if probability.key == NO_COUNTS else gap_text(probability)
     if isinstance(probability.p, Gap):
         return P_FOLLOWS if probability.p.key == "follows" else f"{NO_P}{clause(gap_text(probability.p))}"
     said = _by_test(probability.p, probability.method, findings.form)

@@ -30,11 +30,9 @@ def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
         return _effect(outcome, findings, shown)
     if findings.form == "strata":
         return _strata(outcome, findings, shown)
-    found = given(findings)
-    if isinstance(found, Rates):
-        figures = _three(RATE_KEYS, findings)
-        return gap_text(figures) if isinstance(figures, Gap) else rates_headline(outcome, figures, found, shown)
-    if isinstance(found, PairCounts):
+    if findings.form == "person-time":
+        return _rates(outcome, findings, shown)
+    if findings.form == "pairs":
         return _pairs(outcome, findings, shown)
     if outcome.design == "case-control":
         return _odds(outcome, findings, shown)
@@ -60,6 +58,13 @@ def _odds(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
         return f"{meanings.odds_ratio_claim(outcome, figure, choices)}."
     return _why("odds_ratio", findings)
+
+
+def _rates(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    figures, rates = _three(RATE_KEYS, findings), given(findings)
+    if isinstance(figures, Gap):
+        return gap_text(figures)
+    return rates_headline(outcome, figures, rates, choices) if isinstance(rates, Rates) else ""
 
 
 def _pairs(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:

@@ -6,10 +6,11 @@ from fourcount.appraisal.findings import AnyNumberNeeded, Gap, OutcomeFindings, 
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers
-from fourcount.wording.form import given, measure_of
+from fourcount.wording.form import given, lacking, measure_of
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.unpaired import beyond, needed_line, relative_note
 from fourcount.wording.lines.words import method_word
+from fourcount.wording.pairs import pairs_that_differ
 
 PAIRS_ORDER = (
     "pair_difference",
@@ -49,19 +50,26 @@ def whole_needed_of_pairs(pairs: PairCounts) -> str:
 
 def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> MeasureLine:
     pairs, measure = given(findings), measure_of(key, findings)
-    if not isinstance(pairs, PairCounts):
+    if lacking(findings):
         return blank_line(key, pair_name(key, outcome))
     if isinstance(measure, Gap):
         return withheld_line(key, pair_name(key, outcome), measure)
     if isinstance(measure, AnyNumberNeeded):
-        return needed_line(pair_name(key, outcome, measure), measure, outcome, whole_needed_of_pairs(pairs))
+        people = whole_needed_of_pairs(pairs) if isinstance(pairs, PairCounts) else ""
+        return needed_line(pair_name(key, outcome, measure), measure, outcome, people)
     notes = (beyond(key, measure), relative_note(measure) if key == "pair_ratio" else "")
-    detail = f"{_counts(key, pairs)}, {method_word(measure.method, choices)}"
+    word = method_word(measure.method, choices)
+    detail = ", ".join(part for part in (_counts(key, outcome, findings), word) if part)
     return figure_line(key, pair_name(key, outcome), measure, detail=detail, notes=notes)
 
 
-def _counts(key: str, pairs: PairCounts) -> str:
-    """The counts that a figure rests on."""
+def _counts(key: str, outcome: Outcome, findings: OutcomeFindings) -> str:
+    """The counts that a figure rests on; the odds ratio's are there without the pairs that agree."""
+    pairs, differ = given(findings), pairs_that_differ(outcome, findings)
+    if key == "pair_odds_ratio":
+        return "" if differ is None else f"{numbers.whole(differ[0])} to {numbers.whole(differ[1])} pairs that differ"
+    if not isinstance(pairs, PairCounts):
+        return ""
     total = numbers.whole(pairs.total)
     if key == "pair_difference":
         return "per 100"
@@ -69,6 +77,4 @@ def _counts(key: str, pairs: PairCounts) -> str:
         return f"{numbers.whole(pairs.both + pairs.index_only)} of {total}"
     if key == "pair_risk_reference":
         return f"{numbers.whole(pairs.both + pairs.reference_only)} of {total}"
-    if key == "pair_ratio":
-        return f"{total} pairs"
-    return f"{numbers.whole(pairs.index_only)} to {numbers.whole(pairs.reference_only)} pairs that differ"
+    return f"{total} pairs"

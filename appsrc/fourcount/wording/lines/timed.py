@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import AnyNumberNeeded, Gap, OutcomeFindings, TimedRisks
+from fourcount.appraisal.findings import AnyNumberNeeded, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers
-from fourcount.wording.form import given, measure_of
+from fourcount.wording.form import lacking, measure_of
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.unpaired import measure_name, needed_line, relative_note
 from fourcount.wording.lines.words import NO_SPAN, method_word
@@ -21,7 +21,7 @@ def timed_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -
 
 def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> MeasureLine:
     measure = measure_of(key, findings)
-    if not isinstance(given(findings), TimedRisks):
+    if lacking(findings):
         return blank_line(key, measure_name(key, outcome))
     if isinstance(measure, Gap):
         return withheld_line(key, measure_name(key, outcome), measure)

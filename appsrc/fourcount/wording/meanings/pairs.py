@@ -15,6 +15,7 @@ from fourcount.wording.meanings.parts import (
     times,
     with_interval,
 )
+from fourcount.wording.pairs import pairs_that_differ
 
 
 def difference(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
@@ -77,14 +78,15 @@ def odds_ratio_claim(outcome: Outcome, figure: Figure, choices: Choices) -> str:
 
 def those_that_differ(outcome: Outcome, findings: OutcomeFindings) -> str:
     """``It rests on the 60 pairs that differ: in 20 the event came with night lights only, in 40 ...``."""
-    pairs = given(findings)
-    if not isinstance(pairs, PairCounts):
+    pairs = pairs_that_differ(outcome, findings)
+    if pairs is None:
         return ""
     index, reference = (names.in_group(outcome, group) for group in ("index", "reference"))
-    which = "pair that differs" if pairs.discordant == 1 else "pairs that differ"
+    of_index, of_reference = pairs
+    which = "pair that differs" if of_index + of_reference == 1 else "pairs that differ"
     return (
-        f"It rests on the {numbers.whole(pairs.discordant)} {which}: in {numbers.whole(pairs.index_only)} the event "
-        f"came only {index}, in {numbers.whole(pairs.reference_only)} only {reference}."
+        f"It rests on the {numbers.whole(of_index + of_reference)} {which}: in {numbers.whole(of_index)} the event "
+        f"came only {index}, in {numbers.whole(of_reference)} only {reference}."
     )
 
 

@@ -11,6 +11,7 @@ from fourcount.wording.meanings import unpaired
 from fourcount.wording.meanings.parts import given_estimate, no_interval, spanned, times, with_interval
 from fourcount.wording.printed import PER_UNIT, adjusted_words, paper_measure_name
 
+TURNED = ", here turned round"
 UNCHECKED = "Without counts it cannot be checked against them"
 NO_RISKS = "by itself it does not say how large the {risk}s are"
 NO_RATES = "by itself it does not say how large the rates are"
@@ -29,7 +30,8 @@ def effect(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFindings
     adjusted = adjusted_words(outcome, printed)
     claim = _claim(key, outcome, figure, printed, choices)
     but = _but(key).format(risk=names.risk_name(outcome))
-    return f"The paper prints {article} {name}{adjusted}: {claim}. {UNCHECKED}, and {but}.{no_interval(figure)}"
+    turned = TURNED if (outcome.index_group == "second") != (outcome.counted == "right") else ""
+    return f"The paper prints {article} {name}{adjusted}{turned}: {claim}. {UNCHECKED}, and {but}.{no_interval(figure)}"
 
 
 def risk(group: names.Group, outcome: Outcome, figure: Figure, choices: Choices) -> str:

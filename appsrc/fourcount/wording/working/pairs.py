@@ -2,13 +2,14 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import AnyNumberNeeded, Gap, OutcomeFindings, PairCounts
+from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, OutcomeFindings, PairCounts
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.methods import PAIR_TESTS, test
 from fourcount.wording.form import given, measure_of
 from fourcount.wording.lines.pairs import whole_needed_of_pairs
 from fourcount.wording.numbers import whole
+from fourcount.wording.pairs import pairs_that_differ
 from fourcount.wording.working.parts import (
     ESTIMATE,
     Row,
@@ -24,11 +25,13 @@ from fourcount.wording.working.parts import (
 from fourcount.wording.working.unpaired import needed_rows, units
 
 
-def pair_rows(measure: str, _outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
+def pair_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
     """The rows of one measure of pairs that are there."""
     pairs, found = given(findings), measure_of(measure, findings)
-    if not isinstance(pairs, PairCounts) or isinstance(found, Gap):
+    if isinstance(found, Gap):
         return ()
+    if not isinstance(pairs, PairCounts):
+        return _of_those_that_differ(measure, outcome, findings, choices)
     rows = [(ESTIMATE, pair_formula(measure, pairs))]
     if isinstance(found, AnyNumberNeeded):
         return (*rows, *needed_rows(found, findings.measures["pair_difference"], findings, choices))
@@ -40,13 +43,25 @@ def pair_rows(measure: str, _outcome: Outcome, findings: OutcomeFindings, choice
     return tuple(rows)
 
 
+def _of_those_that_differ(
+    measure: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices
+) -> tuple[Row, ...]:
+    """The odds ratio where only the pairs that differ were typed."""
+    differ, found = pairs_that_differ(outcome, findings), measure_of(measure, findings)
+    if differ is None or not isinstance(found, Figure) or measure != "pair_odds_ratio":
+        return ()
+    pairs = PairCounts(both=0, index_only=differ[0], reference_only=differ[1], neither=0)
+    rows = [(ESTIMATE, quotient(*differ)), *interval_rows(measure, found, choices.level, "pairs")]
+    return (*rows, *other_methods(measure, found, table_measure(measure), (pairs,), choices.level))
+
+
 def pair_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
     """The p of McNemar's tests, and the family's own in full."""
     pairs = given(findings)
     if not isinstance(pairs, PairCounts):
         return ()
     own = [] if isinstance(findings.test, Gap) else about(test(findings.test.method))
-    return (*p_rows(PAIR_TESTS, (pairs,)), *own)
+    return (*p_rows(PAIR_TESTS, (pairs,), findings.test), *own)
 
 
 def pair_formula(measure: str, pairs: PairCounts) -> str:

@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable
 from dataclasses import dataclass
 
-from fourcount.appraisal.findings import Figure, Gap
+from fourcount.appraisal.findings import Figure, Gap, Probability
 from fourcount.record.outcome import Form
 from fourcount.stats.entries.entry import Calculation, HomogeneityEntry
 from fourcount.stats.methods import (
@@ -27,6 +27,7 @@ Row = tuple[str, str]
 
 SPACE: Row = ("", "")
 OTHER_METHODS = "By other methods:"
+CLUSTER = "cluster"  # reasons that withhold every interval and every p alike begin so
 ESTIMATE = "Estimate"
 ALL_METHODS = (*METHODS, *PAIR_METHODS, *RATE_METHODS, *STRATA_METHODS, *TIMED_METHODS)
 METHOD_MEASURES = {
@@ -92,6 +93,8 @@ def other_methods(
     key: str, figure: Figure, measure: str, arguments: tuple[object, ...], level: float, per: int = 1
 ) -> list[Row]:
     """The interval of every other method of the same measure, with the rounding of the one that is shown."""
+    if isinstance(figure.interval, Gap) and figure.interval.key.startswith(CLUSTER):
+        return []
     rows = []
     for entry in methods_of(measure):
         if entry.key != figure.method:
@@ -143,8 +146,11 @@ def reciprocal(change: float, rounded_up: str) -> str:
     return f"1/{plain(change)} = {exact}, rounded up {rounded_up}"
 
 
-def p_rows(tests: tuple[Test, ...], arguments: tuple[object, ...]) -> list[Row]:
-    """The p of every test, or why it has none."""
+def p_rows(tests: tuple[Test, ...], arguments: tuple[object, ...], own: Probability | Gap) -> list[Row]:
+    """The p of every test, or why it has none; none at all where clusters withhold the family's own."""
+    gap = own if isinstance(own, Gap) else own.p
+    if isinstance(gap, Gap) and gap.key.startswith(CLUSTER):
+        return []
     return [(entry.title, p_words(entry.p, arguments)) for entry in tests]
 
 

@@ -44,7 +44,7 @@ def rate_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
     if not isinstance(rates, Rates):
         return ()
     own = [] if isinstance(findings.test, Gap) else about(test(findings.test.method))
-    return (*p_rows(RATE_TESTS, (rates,)), *own)
+    return (*p_rows(RATE_TESTS, (rates,), findings.test), *own)
 
 
 def rate_formula(measure: str, rates: Rates) -> str:

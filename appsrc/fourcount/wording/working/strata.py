@@ -65,7 +65,7 @@ def strata_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
     same = [(entry.title, _homogeneity(entry.test(counts))) for entry in HOMOGENEITY_TESTS]
     found = strata.homogeneity
     how = about(homogeneity_test(found.method)) if isinstance(found, Homogeneity) else []
-    return (*p_rows(STRATA_TESTS, (counts,)), *own, SPACE, *same, *how)
+    return (*p_rows(STRATA_TESTS, (counts,), strata.test), *own, SPACE, *same, *how)
 
 
 def pooled_parts(measure: str, t: Counts) -> tuple[float, float]:

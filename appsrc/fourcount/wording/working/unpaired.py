@@ -187,7 +187,7 @@ def test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
     if counts is None:
         return ()
     own = [] if isinstance(findings.test, Gap) else about(test(findings.test.method))
-    return (*p_rows(TESTS, (counts,)), *_divided(findings), *own)
+    return (*p_rows(TESTS, (counts,), findings.test), *_divided(findings), *own)
 
 
 test_rows.__test__ = False  # type: ignore[attr-defined]  # pytest would collect a function of this name

@@ -1,0 +1,23 @@
+"""The pairs that differ, also where those that agree were never typed."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import OutcomeFindings, PairCounts
+from fourcount.record.outcome import Outcome
+from fourcount.wording.form import given
+
+
+def pairs_that_differ(outcome: Outcome, findings: OutcomeFindings) -> tuple[int, int] | None:
+    """Pairs with the event on the index side only, and on the reference side only; None where neither is known.
+
+    Without all pairs the findings give none, but the table's margins hold those typed, in the print's order. They
+    change places with the groups, and with the outcome that is counted.
+    """
+    pairs, totals = given(findings), findings.totals
+    if isinstance(pairs, PairCounts):
+        return pairs.index_only, pairs.reference_only
+    if totals.first_right is None or totals.second_left is None:
+        return None
+    turned = (outcome.index_group == "second") != (outcome.counted == "right")
+    first, second = totals.first_right, totals.second_left
+    return (second, first) if turned else (first, second)
