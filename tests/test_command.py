@@ -55,6 +55,29 @@ def test_text_is_readable_and_ends_with_the_cautions(design: str, capsys: pytest
     assert said.err == ""
 
 
+def test_what_is_printed_is_checked(capsys: pytest.CaptureFixture[str]) -> None:
+    """Sentences before the figures, and the same matches as the function's in JSON."""
+    printed = "RR 0.49 (95% CI, 0.32 to 0.75; P < 0.001)"
+    assert command.main(["answer", "38", "374", "70", "339", "--printed", printed]) == 0
+    said = " ".join(capsys.readouterr().out.split())
+    assert said.startswith("Does it add up? - Check the name: 0.49 (0.32 to 0.75), printed as a risk ratio")
+    assert command.main(["answer", "38", "374", "70", "339", "--printed", printed, "--json"]) == 0
+    assert json.loads(capsys.readouterr().out) == answer(38, 374, 70, 339, printed=printed)
+
+
+@pytest.mark.parametrize("design", ["matched", "paired", "before-after"])
+def test_pairs_are_counted_both_index_reference_neither(design: str, capsys: pytest.CaptureFixture[str]) -> None:
+    """25 pairs with the index side only against 10 with the reference side only: an odds ratio of 2.5."""
+    words = ["answer", "12", "25", "10", "53", "--design", design]
+    assert command.main([*words, "--printed", "OR 2.50 (1.20 to 5.21)", "--json"]) == 0
+    found = json.loads(capsys.readouterr().out)
+    assert found["measures"]["pair_odds_ratio"]["estimate"] == 2.5
+    assert found["printed"][0]["as"] == "pair_odds_ratio"
+    assert found == answer(12, 25, 10, 53, design=design, printed="OR 2.50 (1.20 to 5.21)")
+    assert command.main(words) == 0
+    assert "2.5" in capsys.readouterr().out
+
+
 def test_counts_are_read_as_people_type_them(capsys: pytest.CaptureFixture[str]) -> None:
     """A thousands mark in a count is no mistake."""
     assert command.main(["answer", "1,204", "8 796", "1'000", "9000", "--json"]) == 0
@@ -78,7 +101,8 @@ MISTAKES = [
     ["answer", "1", "2", "3", "1000000001"],
     ["answer", "1", "2", "3", "3/4"],
     ["answer", "1", "2", "3", "3 (4%)"],
-    ["answer", *TRIAL, "--design", "paired"],
+    ["answer", *TRIAL, "--design", "crossover"],
+    ["answer", *TRIAL, "--printed"],
     ["answer", *TRIAL, "--design"],
     ["answer", *TRIAL, "--intervals", "wald"],
     ["answer", *TRIAL, "--level", "120"],
@@ -119,8 +143,8 @@ def test_help_is_given(words: list[str], capsys: pytest.CaptureFixture[str]) -> 
     """Help names every option and goes to stdout."""
     assert command.main(words) == 0
     said = capsys.readouterr().out
-    for option in ("--design", "--level", "--intervals", "--baseline", "--welcome", "--json", "--version", "--help"):
-        assert option in said
+    for option in ("design", "level", "intervals", "baseline", "welcome", "printed", "json", "version", "help"):
+        assert f"--{option}" in said
     assert all(len(line) <= 80 for line in said.splitlines())
 
 

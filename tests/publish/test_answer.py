@@ -79,8 +79,7 @@ def test_only_whole_numbers_in_range_are_counts(count: Any, place: int) -> None:
 
 
 WRONG = [
-    {"design": "paired"},
-    {"design": "matched"},
+    {"design": "crossover"},
     {"design": None},
     {"design": "a\nb" * 1000},
     {"intervals": "wilson"},
@@ -100,6 +99,8 @@ WRONG = [
     {"baseline": "many"},
     {"baseline": ""},
     {"baseline": [0.1]},
+    {"printed": 0.54},
+    {"printed": b"RR 0.54"},
     {"unwelcome": 1},
     {"unwelcome": None},
 ]

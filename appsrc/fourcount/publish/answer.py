@@ -10,9 +10,7 @@ from numbers import Real
 from typing import cast
 
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.check import check
 from fourcount.publish.contract import contract
-from fourcount.publish.printed import printed as published_check
 from fourcount.record.entry.cell import LARGEST_COUNT
 from fourcount.record.entry.readings import Blank, Unreadable
 from fourcount.record.entry.risk import read_risk
@@ -122,7 +120,12 @@ def answer(  # noqa: PLR0913 - four counts, and five choices by name
 
 def checked(question: Question) -> dict[str, object]:
     """What is said of the printed text; nothing where none was given."""
-    return published_check(check(question.outcome, question.choices)) if question.printed_text else {}
+    if not question.printed_text:
+        return {}
+    from fourcount.appraisal.check import check
+    from fourcount.publish.printed import printed as published_check
+
+    return published_check(check(question.outcome, question.choices))
 
 
 def asked(

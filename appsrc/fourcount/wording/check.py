@@ -21,11 +21,12 @@ Facts = dict[str, Fact]
 BY = " by {methods} at {level}"
 TEXTS = {
     "reproduced": "{printed} follows from the counts: the {name} is {ours}{by}.",
-    "other-name": "Check the name: {printed}, printed as {says}, fits the {name}, {ours}{by}{own}.",
-    "other-way-round": "Check which way round: {printed} fits the {name} {side}, {ours}{by}{own}.",
+    "other-name": "Check the name: {printed}, printed as {says}, fits the {name}, {ours}{by}{own}.{chance}",
+    "other-way-round": "Check which way round: {printed} fits the {name} {side}, {ours}{by}{own}.{chance}",
     "other-name-and-way": "Check the name and which way round: {printed}, printed as {says}, fits the {name} {side}, "
-    "{ours}{by}{own}.",
-    "other-level": "Check the level: {printed} fits the {name}{sided} at {level}, {ours}, by {methods}{not_level}.",
+    "{ours}{by}{own}.{chance}",
+    "other-level": "Check the level: {printed} fits the {name}{sided} at {level}, {ours}, by {methods}{not_level}."
+    "{chance}",
     "also-fits": "It also fits the {name}{sided}, {ours}{by}.",
     "estimate-only": "The estimate follows from the counts; check the limits: {nearest}. An adjusted model, or another "
     "method or level, may be behind the printed ones.",
@@ -65,6 +66,7 @@ OWN_AS_ENTERED = ", while as entered it is {value}"
 NOT_LEVEL = ", while the print says {level}"
 NO_LEVEL = ", and the print names no level"
 SLIP = "; two of its digits may have changed places"
+CHANCE = " So few digits may fit by chance."
 LOG_SCALE = " on the log scale"
 MIRRORED = ": {pairs} would be even"
 SLIPS = ", and so would {parts}, with two digits in each other’s place"
@@ -211,6 +213,9 @@ class _Parts(dict[str, str]):
 
     def _slip(self) -> str:
         return SLIP if self._facts.get("slip") else ""
+
+    def _chance(self) -> str:
+        return CHANCE if self._facts.get("coarse") else ""
 
     def _scale(self) -> str:
         return LOG_SCALE if self._facts.get("log_scale") else ""

@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Iterable, Iterator
 
 from fourcount.appraisal.check.candidate import Candidate, Way
-from fourcount.appraisal.check.digits import transposed
+from fourcount.appraisal.check.digits import last_digits, transposed
 from fourcount.appraisal.check.misses import Miss, near_miss
 from fourcount.appraisal.check.search import Hit, has_limits, hit, nearest_way, wanted_level
 from fourcount.appraisal.check.symmetry import Triple, mirrored_limit, ordered, slips, symmetric, triple_of
@@ -18,6 +18,7 @@ Facts = dict[str, Fact]
 WHOLE = ("reproduced", "other-name", "other-way-round", "other-name-and-way")
 ESTIMATE = ("estimate-only", "estimate-other-name", "estimate-other-way", "estimate-other-name-and-way")
 _MOST_OTHERS = 3
+_FEW_UNITS = 20
 
 
 def effect_findings(
@@ -75,7 +76,7 @@ def _from_counts(
 def _whole(figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...]) -> Iterator[Finding]:
     top, *rest = _groups(hits)
     first = top[0]
-    facts = {**_facts(first, _methods(top)), **_own(figure, first, candidates)}
+    facts = {**_facts(first, _methods(top)), **_own(figure, first, candidates), "coarse": int(_coarse(figure))}
     if figure.adjusted and first.at_level and first.place == 0:
         yield Finding(key="adjusted-is-crude", facts=facts)
         return
@@ -178,6 +179,11 @@ def _facts(one: Hit, methods: str) -> Facts:
         if value is not None:
             facts[name] = value
     return facts
+
+
+def _coarse(figure: PrintedFigure) -> bool:
+    """Whether the estimate has so few digits that much fits it by chance: a third of random prints with one decimal."""
+    return figure.estimate is not None and abs(last_digits(figure.estimate)) < _FEW_UNITS
 
 
 def _own(figure: PrintedFigure, first: Hit, candidates: tuple[Candidate, ...]) -> Facts:
