@@ -99,7 +99,7 @@ def test_two_large_strata_differ_as_breslow_and_day_find_them_to() -> None:
         ((0.5, 0.0, 0.9), "not-positive"),
         ((0.5, 0.9, 0.2), "limits-disordered"),
         ((0.5, 0.2, math.inf), "endless-limit"),
-        ((0.5, 0.5, 0.5), "zero-width"),
+        ((0.5, 0.5, 0.5), "no-width"),
     ],
 )
 def test_an_interval_that_tells_no_error_is_a_reason(second: Estimate, key: str) -> None:
@@ -111,8 +111,8 @@ def test_an_interval_that_tells_no_error_is_a_reason(second: Estimate, key: str)
 def test_a_difference_without_width_is_a_reason() -> None:
     """Whichever of the two it is."""
     sound, flat = (0.1, 0.05, 0.15), (0.1, 0.1, 0.1)
-    assert difference_of_differences(sound, flat, 0.95) == Gap("zero-width")
-    assert difference_of_differences(flat, sound, 0.95) == Gap("zero-width")
+    assert difference_of_differences(sound, flat, 0.95) == Gap("no-width")
+    assert difference_of_differences(flat, sound, 0.95) == Gap("no-width")
 
 
 WIDE = st.floats(1e-300, 1e300)
@@ -124,7 +124,7 @@ def test_every_two_ratios_have_an_answer(first: Estimate, second: Estimate, leve
     """From one end of the doubles to the other: limits in order, 0 and infinity allowed, never nan, or a gap."""
     found = ratio_of_ratios(first, second, level)
     if isinstance(found, Gap):
-        assert found == Gap("zero-width")
+        assert found == Gap("no-width")
     else:
         assert 0 <= found.low <= found.high
         assert 0 <= found.p <= 1

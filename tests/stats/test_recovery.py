@@ -108,11 +108,11 @@ def test_the_approximate_z_of_a_p_of_1_is_not_below_0() -> None:
         (-0.5, 0.2, 0.9, True, "not-positive"),
         (0.5, 0.9, 0.2, True, "limits-disordered"),
         (0.1, 0.2, 0.9, True, "limits-disordered"),
-        (0.5, 0.5, 0.5, True, "zero-width"),
+        (0.5, 0.5, 0.5, True, "no-width"),
         (0.5, 0.2, math.inf, True, "endless-limit"),
         (0.1, -math.inf, 0.2, False, "endless-limit"),
         (0.3, -0.1, 0.2, False, "limits-disordered"),
-        (0.0, 0.0, 0.0, False, "zero-width"),
+        (0.0, 0.0, 0.0, False, "no-width"),
     ],
 )
 def test_limits_that_tell_no_error_have_a_reason(
@@ -130,7 +130,8 @@ def test_limits_that_tell_no_error_have_a_reason(
         (0.0, 0.03, True, "not-positive"),
         (math.inf, 0.03, True, "endless-limit"),
         (0.5, 0.0, True, "p-out-of-range"),
-        (0.5, 1.0, True, "p-out-of-range"),
+        (0.5, 1.0, True, "estimate-at-no-effect"),
+        (0.5, 1.1, True, "p-out-of-range"),
         (0.5, -0.2, False, "p-out-of-range"),
         (1.0, 0.98, True, "estimate-at-no-effect"),
         (0.0, 0.98, False, "estimate-at-no-effect"),

@@ -244,15 +244,15 @@ def test_one_outcome_throughout_is_a_reason(cells: list[tuple[int, ...]], key: s
     assert pooled.robins_breslow_greenland(strata, 0.95) == Gap(key)
     assert pooled.cochran_mantel_haenszel(strata) == Gap(key)
     assert pooled.pooled_risk_difference(strata) == 0
-    assert pooled.sato_difference(strata, 0.95) == Gap("zero-width")
-    assert pooled.greenland_robins_difference(strata, 0.95) == Gap("zero-width")
+    assert pooled.sato_difference(strata, 0.95) == Gap("no-width")
+    assert pooled.greenland_robins_difference(strata, 0.95) == Gap("no-width")
 
 
 def test_everybody_had_the_event_gives_a_risk_ratio_without_width() -> None:
     """All risks 100%: the risk ratio is 1 and its interval would have no width."""
     strata = [counts_of((5, 0, 4, 0)), counts_of((9, 0, 2, 0))]
     assert pooled.pooled_risk_ratio(strata) == 1
-    assert pooled.greenland_robins_ratio(strata, 0.95) == Gap("zero-width")
+    assert pooled.greenland_robins_ratio(strata, 0.95) == Gap("no-width")
 
 
 def test_strata_that_each_tell_nothing_of_an_odds_ratio_are_none() -> None:

@@ -58,7 +58,7 @@ def test_the_difference_s_limits_stay_within_bounds_and_hold_it(one: LimitedRisk
     timed = TimedRisks(index=one, reference=two, level=0.95)
     found = square_and_add(timed)
     if isinstance(found, Gap):
-        assert found == Gap("zero-width")
+        assert found == Gap("no-width")
         return
     assert -1 - 1e-15 <= found.low <= timed_difference(timed) <= found.high <= 1 + 1e-15
 
@@ -140,8 +140,8 @@ def test_printed_limits_that_cannot_be_are_a_reason(index: tuple[float, float, f
 def test_limits_without_width_are_a_reason() -> None:
     """Both risks printed as their own limits say nothing of chance."""
     timed = _timed((0.1, 0.1, 0.1), (0.2, 0.2, 0.2))
-    assert square_and_add(timed) == Gap("zero-width")
-    assert square_and_add_ratio(timed) == Gap("zero-width")
+    assert square_and_add(timed) == Gap("no-width")
+    assert square_and_add_ratio(timed) == Gap("no-width")
 
 
 def test_another_level_than_the_printed_one_has_no_interval() -> None:

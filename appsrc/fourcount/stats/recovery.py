@@ -35,7 +35,7 @@ def from_limits(estimate: float, low: float, high: float, level: float, log_scal
         return Gap("limits-disordered")
     width = _on_scale(high, log_scale) - _on_scale(low, log_scale)
     if width == 0.0:
-        return Gap("zero-width")
+        return Gap("no-width")
     error = width / (2.0 * quantile(level))
     z = _on_scale(estimate, log_scale) / error
     return Recovery(standard_error=error, z=z, p=two_sided_p(z))
@@ -44,7 +44,7 @@ def from_limits(estimate: float, low: float, high: float, level: float, log_scal
 def from_p(estimate: float, p: float, level: float, log_scale: bool) -> Interval | Gap:
     """The interval at this level that belongs to an estimate and its p, by the normal quantile in full.
 
-    An estimate at no effect is 0 standard errors away whatever its error is, so its p tells nothing.
+    An estimate at no effect is 0 standard errors away whatever its error is, so its p tells nothing; nor does a p of 1.
     Source: Altman and Bland 2011, BMJ 343:d2090, with the normal quantile instead of their approximation.
     """
     return _interval(estimate, p, level, log_scale, approximate=False)
@@ -75,11 +75,13 @@ def _interval(estimate: float, p: float, level: float, log_scale: bool, *, appro
     gap = _unsound((estimate,), log_scale)
     if gap is not None:
         return gap
-    if not 0.0 < p < 1.0:
+    if not 0.0 < p <= 1.0:
         return Gap("p-out-of-range")
     centre = _on_scale(estimate, log_scale)
+    if centre == 0.0 or p == 1.0:
+        return Gap("estimate-at-no-effect")
     z = approximate_z(p) if approximate else z_of_p(p)
-    if centre == 0.0 or z == 0.0:
+    if z == 0.0:
         return Gap("estimate-at-no-effect")
     reach = quantile(level) * abs(centre) / z
     if log_scale:

@@ -38,10 +38,11 @@ GAP_KEYS = (
     "ratio-below-one",  # the exposed fare better: there is no share of events that the exposure explains
     "ratio-above-one",  # the exposed fare worse: there is no share of events that the exposure prevents
     "no-reference-events",  # an infinite ratio only says that the unexposed had no event: no share of events follows
+    "no-width",  # the interval would have no width, and no family gives another one
     "endless-log",  # a ratio of 0 or without end has no logarithm, and the formula needs one
     "endless-limit",  # a limit without end gives no standard error
-    "p-out-of-range",  # a p of 0, of 1 or beyond gives no standard error
-    "estimate-at-no-effect",  # an estimate at no effect has the p of 1 whatever its standard error is
+    "p-out-of-range",  # a p lies above 0 and goes up to 1
+    "estimate-at-no-effect",  # an estimate at no effect, or a p of 1, goes with any standard error
     "level-not-printed",  # limits printed at one level give none at another
     "loss-ratio-out-of-range",  # the ratio of the risk among the lost is 0 or more
     "prevalence-out-of-range",  # the share of people exposed lies from 0 to 1

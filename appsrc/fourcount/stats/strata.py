@@ -221,7 +221,7 @@ def _around_difference(centre: float, variance: float, level: float) -> Interval
 
 def _with_width(low: float, high: float) -> Interval | Gap:
     """A width of 0, or one that is lost in the last digit of a double, is no interval."""
-    return Interval(low=low, high=high) if low < high else Gap("zero-width")
+    return Interval(low=low, high=high) if low < high else Gap("no-width")
 
 
 def _common_association(strata: Sequence[Counts], *, correction: float) -> float | Gap:

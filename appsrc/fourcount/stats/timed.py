@@ -35,7 +35,7 @@ def square_and_add(timed: TimedRisks, level: float | None = None) -> Interval | 
     below = math.hypot(one.risk - one.low, two.high - two.risk)
     above = math.hypot(one.high - one.risk, two.risk - two.low)
     if below == 0.0 and above == 0.0:
-        return Gap("zero-width")
+        return Gap("no-width")
     return Interval(low=difference - below, high=difference + above)
 
 
@@ -58,7 +58,7 @@ def square_and_add_ratio(timed: TimedRisks, level: float | None = None) -> Inter
     below = math.hypot(_log_ratio(one.risk, one.low), _log_ratio(two.high, two.risk))
     above = math.hypot(_log_ratio(one.high, one.risk), _log_ratio(two.risk, two.low))
     if below == 0.0 and above == 0.0:
-        return Gap("zero-width")
+        return Gap("no-width")
     return Interval(low=ratio * math.exp(-below), high=ratio * exponential(above))
 
 
