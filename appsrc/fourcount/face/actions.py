@@ -46,7 +46,6 @@ COMMANDS = (
     Command("paper", "table", "Ctrl+3"),
     Command("level", "table", "Ctrl+L", parts_from_last=True),
     Command("adopt", "table", "Ctrl+Shift+M"),
-    *(Command(f"form-{form}", "forms", f"F{number}") for number, form in enumerate(FORMS, start=2)),
     Command("bigger", "view", Standard.ZoomIn),
     Command("smaller", "view", Standard.ZoomOut),
     Command("actual", "view", "Ctrl+0"),
@@ -56,7 +55,10 @@ COMMANDS = (
     Command("keys", "help", "Ctrl+/"),
     Command("about", "help", "Ctrl+Shift+A"),
 )
-"""All commands in the order of the menus."""
+"""All commands in the order of the menus, but for those that take a form of print."""
+
+FORM_COMMANDS = tuple(Command(f"form-{form}", "forms", f"F{number}") for number, form in enumerate(FORMS, start=2))
+"""One for each form; they are made once the window has painted."""
 
 MORE_KEYS = {"redo": "Ctrl+Y", "bigger": "Ctrl+="}
 """Further keys that people expect, taken where the platform does not have them already."""
@@ -96,10 +98,22 @@ def fill_menus(window: QMainWindow, actions: dict[str, QAction]) -> dict[str, QM
     return menus
 
 
+def add_forms(window: QMainWindow, menu: QMenu) -> dict[str, QAction]:
+    """One action for each form of print, in the menu of forms; an action's data is its form."""
+    actions = {}
+    for command, form in zip(FORM_COMMANDS, FORMS, strict=True):
+        action = QAction(labels.COMMANDS[command.key], window)
+        action.setShortcut(QKeySequence(str(command.keys)))
+        action.setData(form)
+        menu.addAction(action)
+        actions[command.key] = action
+    return actions
+
+
 def shortcut_table(actions: dict[str, QAction]) -> list[tuple[str, str]]:
     """Each command's keys as the platform writes them, and its name."""
     rows = []
-    for command in COMMANDS:
+    for command in (*COMMANDS, *FORM_COMMANDS):
         keys = actions[command.key].shortcut().toString(QKeySequence.SequenceFormat.NativeText)
         rows.append((keys, labels.COMMANDS[command.key].replace("&", "")))
     return rows

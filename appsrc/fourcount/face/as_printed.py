@@ -10,12 +10,10 @@ from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout
 
 from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.flow import FlowLayout
-from fourcount.face.form_choice import FormChoice
 from fourcount.face.grid import Grid
 from fourcount.face.grid_forms import GRID_FORMS
 from fourcount.face.links import Link
 from fourcount.face.look import Look
-from fourcount.face.rare_parts import RareParts, TabStops
 from fourcount.face.text import Words
 from fourcount.record.outcome import CELLS, Form, Outcome, form_of
 from fourcount.record.paper import Choices
@@ -23,6 +21,7 @@ from fourcount.wording import labels
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import CheckFindings, OutcomeFindings
+    from fourcount.face.rare_parts import RareParts
 
 LINKS = ("swap", "count-other", "clear", "paste")
 LONG_SPECIMENS = ("person-time", "risk-at-time", "effect-only")
@@ -38,13 +37,23 @@ class AsPrinted(FieldsView):
 
     **Signals**
         example_wanted: the quiet line of the first start was pressed.
+        chosen: one of the rarer choices was made. Carries the outcome's field and the choice.
+        row_wanted: one more row of strata is wanted.
+        paste_taken: what was pasted is to be taken as shown. Carries it.
+        paste_left: what was pasted is not to be taken.
     """
 
     example_wanted = Signal()
+    chosen = Signal(str, object)
+    row_wanted = Signal()
+    paste_taken = Signal(object)
+    paste_left = Signal()
 
     def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
         super().__init__()
         self._look = look
+        self._actions = actions
+        self._rare: RareParts | None = None
         self._long: bool | None = None
         self.setAccessibleName(labels.COLUMNS["printed"])
         self.design = ChoiceField(look, labels.FIELDS["design"], tuple(labels.DESIGNS.items()))
@@ -52,24 +61,38 @@ class AsPrinted(FieldsView):
         self.event_words = TextField(look, "left_words_text", labels.FIELDS["left_words_text"], labels.HINTS["words"])
         self.welcome = ChoiceField(look, labels.FIELDS["welcome"], tuple(labels.WELCOME.items()), whole=True)
         self.span = TextField(look, "span_text", labels.FIELDS["span_text"], labels.HINTS["span_text"])
-        self.form = FormChoice(look)
+        self.form = ChoiceField(look, labels.FIELDS["form"], tuple(labels.FORMS.items()), notes=labels.FORM_NOTES)
         self.layout_choice = ChoiceField(look, labels.FIELDS["layout"], tuple(labels.LAYOUTS.items()))
         self.grid = Grid(look)
         self.notes = Words(look, "small", "caution")
         self.example = Link(look, labels.FIRST_STEP)
         self.links = [Link(look, labels.LINK_WORDS[key], actions[key], labels.LINK_NAMES.get(key, "")) for key in LINKS]
         self._build()
-        stops = TabStops(self.layout_choice, self.grid.cells[CELLS[3]], self.example)
-        self.rare = RareParts(look, actions, self._column, self._printed_row, stops)
-        self.rare.setParent(self)
-        self._pass_on(self.rare)
         self._connect_all()
+
+    @property
+    def rare(self) -> RareParts:
+        """The parts that are not there from the start."""
+        if self._rare is None:
+            from fourcount.face.rare_parts import RareParts, TabStops
+
+            stops = TabStops(self.layout_choice, self.grid.cells[CELLS[3]], self.example)
+            self._rare = RareParts(self._look, self._actions, self._column, self._printed_row, stops)
+            self._rare.setParent(self)
+            self._pass_on(self._rare)
+            self._rare.chosen.connect(self.chosen)
+            self._rare.row_wanted.connect(self.row_wanted)
+            self._rare.paste_taken.connect(self.paste_taken)
+            self._rare.paste_left.connect(self.paste_left)
+        return self._rare
 
     @property
     def fields(self) -> tuple[TextField, ...]:
         """Every field of the column that was made so far, in reading order."""
         own = (self.name, self.event_words, self.span)
-        return (*own, *self.rare.fields_before, *self.grid.fields, *self.rare.fields_after)
+        rare = self._rare
+        before, after = (rare.fields_before, rare.fields_after) if rare else ((), ())
+        return (*own, *before, *self.grid.fields, *after)
 
     def show_state(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
         """Show the outcome as typed, and a sentence for each marked cell."""
@@ -92,12 +115,14 @@ class AsPrinted(FieldsView):
         self.grid.setVisible(form in GRID_FORMS)
         self.grid.show_state(outcome, findings)
         self.example.setVisible(outcome == Outcome())
-        self.rare.show_state(outcome, findings, self._width_of_names())
+        if self._rare or outcome != Outcome():
+            self.rare.show_state(outcome, findings, self._width_of_names())
         self._show_marks(findings)
 
     def show_check(self, outcome: Outcome, check: CheckFindings | None, choices: Choices) -> None:
         """Show what the paper says and whether it adds up."""
-        self.rare.show_check(outcome, check, choices, self._width_of_names())
+        if self._rare or outcome != Outcome():
+            self.rare.show_check(outcome, check, choices, self._width_of_names())
 
     def field_named(self, key: str) -> TextField | None:
         """The field of this column with a key, its row opened where it has one."""
@@ -107,7 +132,7 @@ class AsPrinted(FieldsView):
     @property
     def first_field(self) -> TextField:
         """Where typing the table begins in its form."""
-        return self.rare.first_field or self.grid.cells[CELLS[0]]
+        return (self._rare and self._rare.first_field) or self.grid.cells[CELLS[0]]
 
     def paper_field(self, outcome: Outcome, choices: Choices) -> TextField:
         """The field of what the paper says, made if it is not there yet."""
@@ -133,7 +158,7 @@ class AsPrinted(FieldsView):
         told = [field.field for field in self.grid.fields]
         for field in self.grid.fields:
             field.show_mark(reasons.get(field.field, ""))
-        told += self.rare.show_marks(reasons)
+        told += self._rare.show_marks(reasons) if self._rare else []
         self.notes.show_words("\n".join(dict.fromkeys(text for field, text in reasons.items() if field in told)))
 
     def _build(self) -> None:

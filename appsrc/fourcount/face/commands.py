@@ -6,6 +6,7 @@ from collections.abc import Callable
 from typing import TYPE_CHECKING, Any, cast
 
 from PySide6.QtCore import QObject, Signal
+from PySide6.QtGui import QGuiApplication
 from PySide6.QtWidgets import QWidget
 
 from fourcount.face import clipboard, dialogs
@@ -19,6 +20,7 @@ from fourcount.wording import labels, numbers
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import CheckFindings
     from fourcount.face.for_one_patient import PictureView
+    from fourcount.record.entry.readings import Pasted
 
 
 CHOOSING: dict[str, Callable[..., Any]] = {
@@ -32,16 +34,24 @@ CHOOSING: dict[str, Callable[..., Any]] = {
 """What takes the choices of rows that are not always there."""
 
 
+EFFECT_FIELDS = ("paper_text", "adjusted_text", "adjusted_for_text")
+"""Fields in which a printed effect is what belongs there, not a table to fill."""
+
+
 class Commands(QObject):
     """The slots of the menus' record commands and of the choices in the columns.
 
     **Signals**
         cell_wanted: the table begins anew; bring the cursor to its first cell.
         noticed: a short notice of what was just done. Carries its sentence.
+        paste_offered: a paste might be understood otherwise; show it before it is taken. Carries the ``Pasted``.
+        pasted: a paste filled the table.
     """
 
     cell_wanted = Signal()
     noticed = Signal(str)
+    paste_offered = Signal(object)
+    pasted = Signal()
 
     def __init__(self, session: Session, style: Style, window: QWidget) -> None:
         super().__init__(window)
@@ -144,6 +154,44 @@ class Commands(QObject):
         self._session.settle()
         picture = self.picture.picture if self.picture else None
         self._tell("copy-picture", clipboard.copy_picture(self._session, picture, self._style))
+
+    def take_table(self, field: str, text: str) -> bool:
+        """Fill the table from a text that was pasted into a field; False where the text belongs into the field."""
+        if len(text.split()) < 2 and "," not in text:
+            return False  # one word or one number
+        from fourcount.record.entry.paste import read_paste
+
+        pasted = read_paste(text)
+        if pasted is None or (pasted.form == "effect-only" and field in EFFECT_FIELDS):
+            return False
+        self._offer_or_take(pasted)
+        return True
+
+    def paste(self) -> None:
+        """Fill the table from the clipboard, wherever the cursor is."""
+        from fourcount.record.entry.paste import read_paste
+        from fourcount.wording.printed_labels import NO_TABLE_PASTED
+
+        pasted = read_paste(QGuiApplication.clipboard().text())
+        if pasted is None:
+            self.noticed.emit(NO_TABLE_PASTED)
+        else:
+            self._offer_or_take(pasted)
+
+    def take_paste(self, pasted: Pasted) -> None:
+        """Fill the table with what was understood, and say what was filled."""
+        from fourcount.wording.pasted import filled
+
+        before = self._session.outcome
+        self._session.change_outcome(editing.take_paste(before, pasted))
+        self.pasted.emit()
+        self.noticed.emit(filled(before, self._session.outcome))
+
+    def _offer_or_take(self, pasted: Pasted) -> None:
+        if pasted.ambiguous:
+            self.paste_offered.emit(pasted)
+        else:
+            self.take_paste(pasted)
 
     def tell_unusual_choices(self) -> None:
         """Say so where a new table begins with other intervals than those of a first start."""

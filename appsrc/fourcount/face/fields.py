@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable, Sequence
+from collections.abc import Callable, Mapping, Sequence
 
 from PySide6.QtCore import QEvent, QRect, QSize, Qt, Signal
 from PySide6.QtGui import (
@@ -217,6 +217,8 @@ class FieldsView(QWidget):
 class ChoiceField(QComboBox):
     """A choice among a few, shown as its value with a small triangle over a hairline.
 
+    ``notes`` say in the list, and only there, what each choice stands for.
+
     **Signals**
         chosen: a person chose. Carries the key of the choice.
     """
@@ -232,6 +234,7 @@ class ChoiceField(QComboBox):
         plain: bool = False,
         whole: bool = False,
         snug: bool = False,
+        notes: Mapping[str, str] | None = None,
     ) -> None:
         super().__init__()
         self._look = look
@@ -239,6 +242,9 @@ class ChoiceField(QComboBox):
         self._plain = plain
         self._whole = whole or snug
         self._snug = plain or snug
+        self._notes = notes
+        self._measured: tuple[str, ...] = ()
+        self._widest = 0
         for key, text in choices:
             self.addItem(text, key)
         self.setAccessibleName(name)
@@ -265,14 +271,25 @@ class ChoiceField(QComboBox):
             if self.itemText(index) != text:
                 self.setItemText(index, text)
 
+    def showPopup(self) -> None:
+        if self._notes:
+            from fourcount.face.printed.specimens import show_notes
+
+            show_notes(self, self._look, self._notes)
+        super().showPopup()
+
     def wheelEvent(self, event: QEvent) -> None:
         """Leave the wheel to the page: a choice must not change because somebody scrolled over it."""
         event.ignore()
 
     def sizeHint(self) -> QSize:
-        widest = max((self.fontMetrics().horizontalAdvance(self.itemText(i)) for i in range(self.count())), default=0)
-        shown = self.fontMetrics().horizontalAdvance(self._prefix + self.currentText())
-        return QSize((shown if self._snug else widest) + self._look.px(17), self._look.px(26 if self._plain else 30))
+        texts = (
+            (self._prefix + self.currentText(),) if self._snug else tuple(self.itemText(i) for i in range(self.count()))
+        )
+        if texts != self._measured:  # a layout asks many times
+            self._measured = texts
+            self._widest = max((self.fontMetrics().horizontalAdvance(text) for text in texts), default=0)
+        return QSize(self._widest + self._look.px(17), self._look.px(26 if self._plain else 30))
 
     def minimumSizeHint(self) -> QSize:
         return self.sizeHint() if self._plain or self._whole else QSize(self._look.px(56), self._look.px(30))
@@ -298,5 +315,6 @@ class ChoiceField(QComboBox):
         self.updateGeometry()
 
     def _on_look_changed(self) -> None:
+        self._measured = ()
         self.setFont(self._look.font("body"))
         self.updateGeometry()

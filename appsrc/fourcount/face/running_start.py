@@ -15,6 +15,7 @@ import signal  # noqa: E402, F401
 import threading  # noqa: E402, F401
 from importlib import import_module  # noqa: E402, F401
 
+import fourcount.face.grid_forms  # noqa: E402
 import fourcount.ink.palette  # noqa: E402
 import fourcount.picture.plan  # noqa: E402
 import fourcount.record.editing  # noqa: E402

@@ -14,7 +14,6 @@ from fourcount.face import actions as commands_table
 from fourcount.face import dialogs
 from fourcount.face.as_printed import AsPrinted
 from fourcount.face.cautions_strip import CautionsStrip
-from fourcount.face.checking import Checking
 from fourcount.face.columns import Page, PageScroll
 from fourcount.face.commands import Commands
 from fourcount.face.cursor_keeper import CursorKeeper
@@ -22,18 +21,18 @@ from fourcount.face.for_one_patient import ForOnePatient
 from fourcount.face.header import Banner, Hairline, Header
 from fourcount.face.later import Later
 from fourcount.face.look import APPEARANCES, Look
-from fourcount.face.pasting import Pasting
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
 from fourcount.record import editing
-from fourcount.record.outcome import FORMS, Outcome
+from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
 from fourcount.wording.standing import STANDING
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
+    from fourcount.face.checking import Checking
 
 FIRST_SIZE = QSize(1280, 800)
 ROOM_FOR_A_FRAME = QSize(0, 40)
@@ -60,8 +59,7 @@ class MainWindow(QMainWindow):
         self._painted = False
         self._shown: Record | None = None
         self.commands = Commands(session, look, self)
-        self.pasting = Pasting(session, self)
-        self.checking = Checking(session, later, self)
+        self.checking: Checking | None = None
         self.actions_by_key = commands_table.make_actions(self)
         self.header = Header(look)
         self.banner = Banner(look)
@@ -137,15 +135,13 @@ class MainWindow(QMainWindow):
         self.printed.design.chosen.connect(do.choose_design)
         self.printed.welcome.chosen.connect(do.choose_welcome)
         self.printed.form.chosen.connect(do.choose_form)
-        self.printed.take_table = self.pasting.take_table
-        self.printed.rare.chosen.connect(do.choose)
-        self.printed.rare.row_wanted.connect(go.add_row)
-        self.printed.rare.paste_taken.connect(self.pasting.take)
-        self.printed.rare.paste_left.connect(go.paste_over)
-        self.pasting.offered.connect(go.paste_offered)
-        self.pasting.taken.connect(go.paste_over)
-        self.pasting.noticed.connect(self.header.tell)
-        self.checking.changed.connect(self._show_check)
+        self.printed.take_table = do.take_table
+        self.printed.chosen.connect(do.choose)
+        self.printed.row_wanted.connect(go.add_row)
+        self.printed.paste_taken.connect(do.take_paste)
+        self.printed.paste_left.connect(go.paste_over)
+        do.paste_offered.connect(go.paste_offered)
+        do.pasted.connect(go.paste_over)
         self.printed.layout_choice.chosen.connect(do.choose_layout)
         self.printed.example_wanted.connect(do.open_example)
         self.says.family_chosen.connect(do.choose_family)
@@ -167,7 +163,7 @@ class MainWindow(QMainWindow):
             "new": do.new_table, "example": do.open_example, "quit": self.close, "undo": self.session.undo,
             "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
             "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
-            "paste": self.pasting.paste, "form": go.to_form, "add-row": go.add_row,
+            "paste": do.paste, "form": go.to_form, "add-row": go.add_row,
             "remove-row": go.remove_row, "adopt": self._on_adopt, "paper": go.to_paper, "level": do.ask_level,
             "layout": do.change_layout, "clear": do.clear_counts,
             "first-cell": go.to_first_cell, "baseline": go.to_baseline, "bigger": self._on_bigger,
@@ -177,8 +173,6 @@ class MainWindow(QMainWindow):
         }  # fmt: skip
         for key, handler in handlers.items():
             self.actions_by_key[key].triggered.connect(handler)
-        for form in FORMS:
-            self.actions_by_key[f"form-{form}"].setData(form)
         self.menus["forms"].triggered.connect(go.form_chosen)
 
     # What is shown
@@ -191,8 +185,9 @@ class MainWindow(QMainWindow):
             self.header.tell("")
         self._shown = record
         self.printed.show_state(outcome, findings)
-        self.checking.follow()
-        self._show_check()
+        if self.checking:
+            self.checking.follow()
+            self._show_check()
         self.says.show_state(record, outcome, findings)
         self.patient.show_state(record, outcome, findings)
         self.cautions.show_state(findings)
@@ -204,7 +199,8 @@ class MainWindow(QMainWindow):
 
     def _show_check(self) -> None:
         """Show what the paper says, and what the last check found."""
-        found, choices = self.checking.found, self.session.record.choices
+        found = self.checking.found if self.checking else None
+        choices = self.session.record.choices
         self.printed.show_check(self.session.outcome, found, choices)
         self.actions_by_key["adopt"].setEnabled(bool(found and found.adopt))
 
@@ -265,7 +261,12 @@ class MainWindow(QMainWindow):
         from fourcount.assets_folder import assets_folder
 
         self.setWindowIcon(QIcon(str(assets_folder() / "fourcount.png")))
+        from fourcount.face.checking import Checking
+
         gc.enable()
+        self.actions_by_key |= commands_table.add_forms(self, self.menus["forms"])
+        self.checking = Checking(self.session, self._later, self)
+        self.checking.changed.connect(self._show_check)
         self.session.wake()
         self.commands.tell_unusual_choices()
         self._later.load()
@@ -279,7 +280,7 @@ class MainWindow(QMainWindow):
             self.session.take_findings(outcome, findings)
 
     def _on_adopt(self) -> None:
-        self.commands.adopt(self.checking.found)
+        self.commands.adopt(self.checking.found if self.checking else None)
 
     def _on_bigger(self) -> None:
         self.look.step_zoom(1)

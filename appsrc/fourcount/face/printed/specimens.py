@@ -1,6 +1,8 @@
-"""How the list of forms of print is painted: the specimen, and what it stands for in muted words at the right."""
+"""How a list with notes is painted: the choice, and what it stands for in muted words at the right."""
 
 from __future__ import annotations
+
+from collections.abc import Mapping
 
 from PySide6.QtCore import QModelIndex, QPersistentModelIndex, QSize, Qt
 from PySide6.QtGui import QFontMetrics, QPainter
@@ -41,3 +43,14 @@ class SpecimenDelegate(QStyledItemDelegate):
     def _width(self, specimen: str, note: str) -> int:
         body, small = QFontMetrics(self._look.font("body")), QFontMetrics(self._look.font("small"))
         return body.horizontalAdvance(specimen) + small.horizontalAdvance(note) + self._look.px(48)
+
+
+def show_notes(box: QComboBox, look: Look, notes: Mapping[str, str]) -> None:
+    """Give each entry of a list its note, and the list the width that both need."""
+    if not isinstance(box.itemDelegate(), SpecimenDelegate):
+        for index in range(box.count()):
+            note = notes[box.itemData(index)]
+            box.setItemData(index, note, Qt.ItemDataRole.StatusTipRole)
+            box.setItemData(index, f"{box.itemText(index)}, {note}", Qt.ItemDataRole.AccessibleTextRole)
+        box.setItemDelegate(SpecimenDelegate(look, box))
+    box.view().setMinimumWidth(max(box.view().sizeHintForColumn(0), box.width()))
