@@ -6,11 +6,22 @@ from collections.abc import Callable
 
 import pytest
 
-from fourcount.appraisal.check import check_figures
+from fourcount.appraisal.check import check, check_figures
 from fourcount.appraisal.check.basis import Basis, of_pairs, of_rates, of_strata, of_timed
 from fourcount.appraisal.check.other_forms import apart, turned_pairs, turned_rates
 from fourcount.appraisal.findings import FigureCheck
 from fourcount.record.entry.readings import PrintedFigure
+from fourcount.record.outcome import (
+    EffectOnly,
+    EventsAndOthers,
+    Outcome,
+    Pairs,
+    PercentOfTotal,
+    PersonTime,
+    RiskAtTime,
+    Strata,
+    Stratum,
+)
 from fourcount.record.paper import Choices
 from fourcount.stats import pairs as paired
 from fourcount.stats import rates as of_time
@@ -73,7 +84,7 @@ def test_an_unmatched_odds_ratio_of_matched_pairs() -> None:
     woolf = method("odds_ratio", "woolf").interval(people, 0.95)
     value = people.index_events * people.reference_non_events / people.index_non_events / people.reference_events
     found = of(printed("odds_ratio", *texts(woolf, value)), of_pairs(PAIRS))
-    assert found.findings[0].key == "other-name"
+    assert found.findings[0].key == "other-analysis"
     assert found.findings[0].facts["measure"] == "unpaired_odds_ratio"
 
 
@@ -126,7 +137,7 @@ def test_pooled_and_crude_strata_are_told_apart() -> None:
     assert (found.findings[0].key, found.findings[0].facts["measure"]) == ("reproduced", "pooled_odds_ratio")
     woolf = method("odds_ratio", "woolf").interval(crude(), 0.95)
     found = of(printed("odds_ratio", *texts(woolf, 50 * 215 / 150 / 35)), basis)
-    assert (found.findings[0].key, found.findings[0].facts["measure"]) == ("other-name", "crude_odds_ratio")
+    assert (found.findings[0].key, found.findings[0].facts["measure"]) == ("other-analysis", "crude_odds_ratio")
 
 
 def test_risks_at_a_time() -> None:
@@ -143,3 +154,67 @@ def test_turning_twice_is_turning_back() -> None:
         assert turned_pairs(turned_pairs(PAIRS, side), side) == PAIRS  # type: ignore[arg-type]
     assert turned_rates(turned_rates(RATES, "groups-swapped"), "groups-swapped") == RATES
     assert paired.odds_ratio(turned_pairs(PAIRS, "other-outcome")) == pytest.approx(0.4)
+
+
+def said(outcome: Outcome) -> list[str]:
+    return [finding.key for finding in check(outcome, Choices()).figures[0].findings]
+
+
+def test_clusters_taken_into_account_or_not() -> None:
+    """Katz's limits from the counts divided by a design effect of 1.48, and those of people in no clusters."""
+    cells = {"first_left_text": "38", "first_right_text": "374", "second_left_text": "70", "second_right_text": "339"}
+
+    def outcome(text: str) -> Outcome:
+        return Outcome(table=EventsAndOthers(**cells), icc_text="0.02", cluster_size_text="25", paper_text=text)
+
+    assert said(outcome("RR 0.54 (0.34 to 0.85)")) == ["reproduced"]
+    naive = outcome("RR 0.54 (0.37 to 0.78)")
+    assert said(naive)[0] == "other-analysis"
+    assert check(naive, Choices()).adopt is None
+    unknown = Outcome(table=EventsAndOthers(**cells), cluster_size_text="25", paper_text="RR 0.54 (0.37 to 0.78)")
+    assert said(unknown) == ["reproduced"]
+    assert check(unknown, Choices()).adopt is None  # the window withholds intervals there
+
+
+def test_discordant_pairs_alone() -> None:
+    """Their odds ratio is checked where no others are typed, whichever side is the index side."""
+    table = Pairs(first_right_text="25", second_left_text="10")
+    for side, text in (("first", "OR 2.5 (1.20 to 5.21)"), ("second", "OR 0.40 (0.19 to 0.83)")):
+        outcome = Outcome(design="matched", table=table, index_group=side, paper_text=text)  # type: ignore[arg-type]
+        assert said(outcome) == ["reproduced"]
+        assert check(outcome, Choices()).adopt == ("textbook", 0.95)
+
+
+def test_every_form_is_checked_as_typed() -> None:
+    """From cells to sentences: person-time, strata, risks at a time, and an effect without counts."""
+    rates = PersonTime(
+        first_left_text="38",
+        first_right_text="4120",
+        second_left_text="70",
+        second_right_text="4090",
+        unit_text="years",
+    )
+    assert said(Outcome(table=rates, paper_text="rate ratio 0.54 (0.36 to 0.80)")) == ["reproduced"]
+    row = {"first_left_text": "10", "first_right_text": "100", "second_left_text": "20", "second_right_text": "200"}
+    other = {"first_left_text": "40", "first_right_text": "100", "second_left_text": "15", "second_right_text": "50"}
+    strata = Strata(strata=(Stratum(**row), Stratum(**other)))
+    assert said(Outcome(table=strata, paper_text="OR 2.05 (1.27 to 3.30)"))[0] == "other-analysis"
+    timed = RiskAtTime(first_left_text="9% (6 to 12)", second_left_text="17% (13 to 21)")
+    assert said(Outcome(table=timed, paper_text="RD -8.0 percentage points (-13.0 to -3.0)")) == ["reproduced"]
+    effect = Outcome(table=EffectOnly(), paper_text="HR 0.72 (0.55 to 0.94), P = 0.02")
+    assert said(effect) == ["symmetric", "p-from-limits"]
+
+
+def test_percentages_that_fit_several_counts() -> None:
+    """9% of 412 may be 35 to 39: the nearest, 37, does not give the print, and 38 does; it is said, nothing adopted."""
+    table = PercentOfTotal(
+        first_left_text="9%", first_right_text="412", second_left_text="17%", second_right_text="409"
+    )
+    found = check(Outcome(table=table, paper_text="RR 0.539 (0.372 to 0.781)"), Choices())
+    assert [finding.key for finding in found.figures[0].findings] == ["reproduced"]
+    (finding,) = found.cells
+    assert (finding.key, finding.facts["first"], finding.facts["second"]) == ("other-counts", 38, 70)
+    assert finding.facts["first_taken"] == 37
+    assert found.adopt is None
+    unfit = check(Outcome(table=table, paper_text="RR 0.70 (0.41 to 0.99)"), Choices())
+    assert unfit.cells == ()

@@ -54,6 +54,7 @@ PRINTS = [
     printed("risk", "9.2", "6.8", "12.4", unit="percent"),
     printed("p", p="0.03"),
     printed("risk_ratio", "", "0.372", "0.781"),
+    printed("odds_ratio", "2.05", "1.27", "3.30"),
 ]
 BASES = {
     "counts": of_counts(counts_of(FALLS)),
@@ -102,8 +103,8 @@ def test_what_asks_says_check_and_what_agrees_does_not(basis: Basis) -> None:
 def test_every_finding_has_its_sentence() -> None:
     """The prints above bring out each sentence, so that none is there for nothing and none is missing."""
     said = {line.key for basis in BASES.values() for line in check_lines(found(basis))}
-    in_cells = {"percent-none-of-total", "percent-other-count"}
-    rare = {"estimate-other-way", "estimate-other-name-and-way", "other-name-and-way"}
+    in_cells = {"percent-none-of-total", "percent-other-count", "other-counts"}
+    rare = {"estimate-other-way", "estimate-other-analysis", "estimate-other-name-and-way", "other-name-and-way"}
     assert (set(TEXTS) | set(P_TEXTS)) - said - rare == in_cells
     assert said <= set(TEXTS) | set(P_TEXTS)
 
@@ -128,29 +129,29 @@ def line_of(text: str, **rest: Any) -> str:
         (
             "RR 0.492 (95% CI, 0.323 to 0.750)",
             (
-                "Check the name: 0.492 (0.323 to 0.750), printed as a risk ratio, fits the odds ratio, 0.4921 (0.3229 to "
-                "0.7499) by Woolf logit at 95%, while the risk ratio is 0.5389."
+                "Check the name: 0.492 (0.323 to 0.750), printed as a risk ratio, fits the odds ratio, 0.4921 "
+                "(0.3229 to 0.7499) by Woolf logit at 95%, while the risk ratio is 0.5389."
             ),
         ),
         (
             "RR 1.86 (1.28–2.69)",
             (
-                "Check which way round: 1.86 (1.28 to 2.69) fits the risk ratio with the groups swapped, 1.856 (1.281 to "
-                "2.688) by Katz log at 95%, while as entered it is 0.539."
+                "Check which way round: 1.86 (1.28 to 2.69) fits the risk ratio with the groups swapped, 1.856 "
+                "(1.281 to 2.688) by Katz log at 95%, while as entered it is 0.539."
             ),
         ),
         (
             "RR 0.539 (95% CI, 0.395 to 0.735)",
             (
-                "Check the level: 0.539 (0.395 to 0.735) fits the risk ratio at 90%, 0.5389 (0.3949 to 0.7354), by Katz "
-                "log, while the print says 95%."
+                "Check the level: 0.539 (0.395 to 0.735) fits the risk ratio at 90%, 0.5389 (0.3949 to 0.7354), by "
+                "Katz log, while the print says 95%."
             ),
         ),
         (
             "RR 0.54 (0.37 to 0.87)",
             (
-                "Check the upper limit: Katz log, Koopman score or Miettinen–Nurminen score at 95% gives 0.781, not 0.87, "
-                "while the other limit and the estimate fit; two of its digits may have changed places."
+                "Check the upper limit: Katz log, Koopman score or Miettinen–Nurminen score at 95% gives 0.781, not "
+                "0.87, while the other limit and the estimate fit; two of its digits may have changed places."
             ),
         ),
         (

@@ -27,11 +27,14 @@ TEXTS = {
     "{ours}{by}{own}.{chance}",
     "other-level": "Check the level: {printed} fits the {name}{sided} at {level}, {ours}, by {methods}{not_level}."
     "{chance}",
+    "other-analysis": "Check the analysis: {printed} fits the {name}{sided}, {ours}{by}{own}.{chance}",
     "also-fits": "It also fits the {name}{sided}, {ours}{by}.",
     "estimate-only": "The estimate follows from the counts; check the limits: {nearest}. An adjusted model, or another "
     "method or level, may be behind the printed ones.",
     "estimate-other-name": "Check the name: the estimate, printed as {says}, fits the {name}, {ours}{own}; no method "
     "here gives the printed limits.",
+    "estimate-other-analysis": "Check the analysis: the estimate fits the {name}{sided}, {ours}{own}; no method here "
+    "gives the printed limits.",
     "estimate-other-way": "Check which way round: the estimate fits the {name} {side}, {ours}{own}; no method here "
     "gives the printed limits.",
     "estimate-other-name-and-way": "Check the figure: its estimate fits the {name} {side}, {ours}{own}, which may be "
@@ -55,6 +58,9 @@ TEXTS = {
     "percent-none": "Check the percentage: no whole number of {total} gives {printed}; {events} of {total} is {own}.",
     "percent-none-of-total": "Check {text}: no whole number of {total} gives {percent}%; {events} of {total} is "
     "{share}.",
+    "other-counts": "Check the counts: the print follows from {first} of {first_total} and {second} of {second_total}, "
+    "for instance, which round to the same percentages; the figures here are those of {first_taken} and "
+    "{second_taken}.",
     "percent-other-count": "Check {text}: {percent}% of {total} is {fitting}, while {events} is {share}.",
 }
 """One sentence for every finding but those about p."""
@@ -107,6 +113,8 @@ def finding_text(finding: Finding, figure: PrintedFigure) -> str:
 def cell_text(finding: Finding) -> str:
     """A finding about a percentage that stands beside a count, as a sentence."""
     facts = finding.facts
+    if finding.key == "other-counts":
+        return TEXTS[finding.key].format_map({name: _whole(value) for name, value in facts.items()})
     share = facts.get("own")
     parts = {
         "text": quoted(str(facts.get("text", ""))),

@@ -39,6 +39,7 @@ MEASURES = {
 }
 ANALYSES = {
     "unpaired_": "{measure} of people taken as unpaired",
+    "unclustered_": "{measure} of people taken as if in no clusters",
     "crude_": "crude {measure} of all strata thrown together",
 }
 SIDES = {

@@ -7,13 +7,15 @@ print: whether the limits are symmetric, and whether p goes with them.
 
 from __future__ import annotations
 
+from dataclasses import replace
 from functools import lru_cache
 
 import msgspec
 
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.check.adoption import adoption
-from fourcount.appraisal.check.basis import Basis, basis_of
+from fourcount.appraisal.check.basis import Basis, basis_of, of_counts
+from fourcount.appraisal.check.other_counts import other_counts
 from fourcount.appraisal.check.percentages import of_cells, of_risk
 from fourcount.appraisal.check.probability import p_findings
 from fourcount.appraisal.check.search import ALWAYS_TO, Hit, search, wanted_level
@@ -33,18 +35,22 @@ REMEMBERED = 256
 def check(outcome: Outcome, choices: Choices) -> CheckFindings:
     """The check of all that an outcome's print says of its counts; remembered for equal arguments.
 
-    Of a figure printed after adjustment only what needs no counts is asked.
+    Of a figure printed after adjustment only what needs no counts is asked. Where percentages fit several counts, those
+    nearest to them are taken, and others if only these give the print.
     """
     # The counts do not depend on the family, and this one is never slow.
     findings = appraise(outcome, Choices(family="score", level=choices.level))
     paper = read_paper(outcome.paper_text, outcome.paper_measure)
     adjusted = read_paper(outcome.adjusted_text, outcome.adjusted_measure, "adjusted_text")
-    found = check_figures(paper.figures, basis_of(findings), choices)
+    found = check_figures(paper.figures, basis_of(findings, outcome), choices)
+    others = other_counts(outcome, paper.figures) if not _all_follow(found) else None
+    if others is not None:
+        found = check_figures(paper.figures, replace(of_counts(others.counts), adoptable=False), choices)
     alone = check_figures(tuple(_as_adjusted(figure) for figure in adjusted.figures), Basis(), choices)
     return CheckFindings(
         figures=found.figures + alone.figures,
-        marks=paper.marks + adjusted.marks,
-        cells=of_cells(findings.marks),
+        marks=paper.marks,
+        cells=(() if others is None else (others.finding,)) + of_cells(findings.marks),
         adopt=found.adopt,
     )
 
@@ -54,8 +60,13 @@ def check_figures(figures: tuple[PrintedFigure, ...], basis: Basis, choices: Cho
     found = [(figure, search(figure, basis.candidates(figure.measure), basis.largest)) for figure in figures]
     return CheckFindings(
         figures=tuple(_checked(figure, hits, basis) for figure, hits in found),
-        adopt=adoption(found, choices),
+        adopt=adoption(found, choices) if basis.adoptable else None,
     )
+
+
+def _all_follow(found: CheckFindings) -> bool:
+    """Whether every printed figure follows as printed; nothing printed leaves nothing to look for."""
+    return all(figure.findings and figure.findings[0].agrees for figure in found.figures)
 
 
 def _checked(figure: PrintedFigure, hits: tuple[Hit, ...], basis: Basis) -> FigureCheck:

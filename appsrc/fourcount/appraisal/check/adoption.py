@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Iterable
 from typing import cast
 
-from fourcount.appraisal.check.search import Hit, has_limits
+from fourcount.appraisal.check.search import OTHER_ANALYSES, Hit, has_limits
 from fourcount.record.entry.readings import PrintedFigure
 from fourcount.record.paper import HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family
 from fourcount.stats.methods import FAMILIES, PAIR_FAMILIES, RATE_FAMILIES
@@ -40,17 +40,22 @@ def adoption(found: Iterable[tuple[PrintedFigure, tuple[Hit, ...]]], choices: Ch
 
 
 def _told(hits: tuple[Hit, ...]) -> set[tuple[str, str, float]]:
-    """Measure, method and level of each whole match that is shown to the reader as it stands."""
+    """Measure, method and level of each whole match of the best rank that the window shows as it stands."""
     return {
         (hit.candidate.measure, hit.match.method, hit.match.level)
         for hit in hits
-        if hit.match.fit == "all" and hit.candidate.orientation == "as-read" and _shown(hit)
+        if hit.match.fit == "all"
+        and hit.rank == hits[0].rank
+        and hit.candidate.orientation == "as-read"
+        and _shown(hit)
     }
 
 
 def _shown(hit: Hit) -> bool:
-    """Whether the window shows this very estimate: neither a conditional one nor that of an analysis it refuses."""
-    return not hit.candidate.heavy and not hit.candidate.key.startswith(("unpaired", "crude"))
+    """Whether the window shows this very estimate: not a conditional one, nor turned, nor of an analysis it refuses."""
+    if hit.candidate.orientation != "as-read":
+        return False
+    return not hit.candidate.heavy and not hit.candidate.key.startswith(OTHER_ANALYSES)
 
 
 def _holds(ways: set[tuple[str, str, float]], family: str, level: float) -> bool:

@@ -3,20 +3,22 @@
 from __future__ import annotations
 
 from collections.abc import Callable, Iterable
-from dataclasses import dataclass, field
+from dataclasses import dataclass, field, replace
 
 from fourcount.appraisal.check.candidate import Candidate
-from fourcount.appraisal.check.other_forms import apart, paired, person_time, stratified, timed
+from fourcount.appraisal.check.other_forms import apart, clustered, discordant, paired, person_time, stratified, timed
 from fourcount.appraisal.check.percentages import Group
 from fourcount.appraisal.check.probability import Tested
 from fourcount.appraisal.check.search import NEVER_FROM
 from fourcount.appraisal.check.unpaired import unpaired
-from fourcount.appraisal.findings import OutcomeFindings, StrataFindings
+from fourcount.appraisal.findings import Clusters, OutcomeFindings, StrataFindings, Totals
 from fourcount.record.entry.readings import PrintedMeasure
+from fourcount.record.outcome import Outcome
+from fourcount.stats.clusters import effective
 from fourcount.stats.entries.entry import Test
 from fourcount.stats.entries.print_only import PRINT_TESTS
 from fourcount.stats.methods import PAIR_TESTS, RATE_TESTS, STRATA_TESTS, TESTS
-from fourcount.stats.results import Counts, PairCounts, Rates, TimedRisks
+from fourcount.stats.results import Counts, FractionalCounts, Gap, PairCounts, Rates, TimedRisks
 
 _CONDITIONAL_TESTS = frozenset({"fisher", "fisher-mid-p"})
 _USUAL_TESTS = ("pearson", "fisher", "yates")  # what papers usually print is named first
@@ -30,15 +32,26 @@ class Basis:
     tests: Callable[[], tuple[Tested, ...]] = field(default=tuple)
     largest: float = 0
     groups: tuple[Group, ...] = ()
+    adoptable: bool = True  # whether the window shows these very figures under some family and level
 
 
-def basis_of(findings: OutcomeFindings) -> Basis:
+def basis_of(findings: OutcomeFindings, outcome: Outcome) -> Basis:
     """What these findings rest on."""
+    clusters = findings.extras.clusters
+    if isinstance(findings.counts, Counts) and isinstance(clusters, Clusters) and findings.strata is None:
+        return of_clusters(findings.counts, clusters)
+    basis = _without_clusters(findings, outcome)
+    return basis if clusters is None else replace(basis, adoptable=False)
+
+
+def _without_clusters(findings: OutcomeFindings, outcome: Outcome) -> Basis:
     if isinstance(findings.strata, StrataFindings) and isinstance(findings.counts, Counts):
         return of_strata(tuple(stratum.counts for stratum in findings.strata.strata), findings.counts)
     if isinstance(findings.counts, Counts):
         return of_counts(findings.counts)
     given = findings.given
+    if given == Gap("concordant-pairs-unknown"):
+        return of_discordant(findings.totals, outcome)
     if isinstance(given, PairCounts):
         return of_pairs(given)
     if isinstance(given, Rates):
@@ -54,6 +67,29 @@ def of_counts(counts: Counts) -> Basis:
         tests=lambda: _tested(counts, conditional=largest <= NEVER_FROM),
         largest=largest,
         groups=((counts.index_events, counts.index_total), (counts.reference_events, counts.reference_total)),
+    )
+
+
+def of_clusters(counts: Counts, clusters: Clusters) -> Basis:
+    """Four counts of people in clusters, intervals and tests from the counts divided by the design effect."""
+    whole, behind = of_counts(counts), effective(counts, clusters.design_effect)
+    return replace(
+        whole,
+        candidates=lambda says: clustered(counts, behind, says),
+        tests=lambda: _tested(behind, conditional=False) + whole.tests(),
+    )
+
+
+def of_discordant(totals: Totals, outcome: Outcome) -> Basis:
+    """Discordant pairs alone, turned to the index side and the counted outcome."""
+    index_only, reference_only = totals.first_right or 0, totals.second_left or 0
+    if (outcome.index_group == "second") is not (outcome.counted == "right"):
+        index_only, reference_only = reference_only, index_only
+    pairs = PairCounts(both=0, index_only=index_only, reference_only=reference_only, neither=0)
+    return Basis(
+        candidates=lambda says: discordant(pairs, says),
+        tests=lambda: _all_tests(PAIR_TESTS, pairs),
+        largest=max(index_only, reference_only),
     )
 
 
@@ -93,7 +129,7 @@ def of_strata(strata: tuple[Counts, ...], crude: Counts) -> Basis:
     )
 
 
-def _tested(counts: Counts, *, conditional: bool) -> tuple[Tested, ...]:
+def _tested(counts: FractionalCounts, *, conditional: bool) -> tuple[Tested, ...]:
     entries = [test for test in TESTS + PRINT_TESTS if conditional or test.key not in _CONDITIONAL_TESTS]
     entries.sort(key=lambda test: _USUAL_TESTS.index(test.key) if test.key in _USUAL_TESTS else len(_USUAL_TESTS))
     return _all_tests(entries, counts)

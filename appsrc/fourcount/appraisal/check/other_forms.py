@@ -22,7 +22,7 @@ from fourcount.stats.entries.entry import Method
 from fourcount.stats.entries.strata import STRATA_METHODS
 from fourcount.stats.entries.timed import TIMED_METHODS
 from fourcount.stats.methods import PAIR_METHODS, RATE_METHODS
-from fourcount.stats.results import Counts, Gap, PairCounts, Rates, TimedRisks
+from fourcount.stats.results import Counts, FractionalCounts, Gap, PairCounts, Rates, TimedRisks
 
 Given = PairCounts | Rates | TimedRisks | tuple[Counts, ...]
 ByName = dict[PrintedMeasure, tuple[Reading, ...]]
@@ -74,6 +74,16 @@ def stratified(strata: tuple[Counts, ...], crude: Counts, says: PrintedMeasure) 
     if says == "risk":
         return unpaired(crude, says)
     return (*_all(_STRATA, strata, says, _turned_strata), *_otherwise(unpaired(crude, says), "crude"))
+
+
+def clustered(counts: Counts, behind: FractionalCounts, says: PrintedMeasure) -> tuple[Candidate, ...]:
+    """The counts divided by a design effect, and the same people as if they were in no clusters."""
+    return (*unpaired(counts, says, behind), *_otherwise(unpaired(counts, says), "unclustered"))
+
+
+def discordant(pairs: PairCounts, says: PrintedMeasure) -> tuple[Candidate, ...]:
+    """What the discordant pairs give where the others are not known: their odds ratio."""
+    return tuple(one for one in _all(_PAIRS, pairs, says, turned_pairs) if one.measure == "pair_odds_ratio")
 
 
 def timed(risks: TimedRisks, says: PrintedMeasure) -> tuple[Candidate, ...]:

@@ -16,6 +16,9 @@ from fourcount.appraisal.check.digits import last_digits, rounds_to, scale_of
 from fourcount.appraisal.findings.check import Fit, Match
 from fourcount.record.entry.readings import PrintedFigure, PrintedNumber
 
+OTHER_ANALYSES = ("unpaired_", "crude_", "unclustered_")
+"""How the keys of measures begin that are worked out as the form does not ask for."""
+
 USUAL_LEVEL = 0.95
 LEVELS = (0.95, 0.90, 0.99)
 ALWAYS_TO = 100_000

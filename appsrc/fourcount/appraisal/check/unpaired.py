@@ -7,6 +7,7 @@ from collections.abc import Callable
 from dataclasses import dataclass
 from fractions import Fraction
 from functools import partial
+from typing import TypeVar
 
 from fourcount.appraisal.check.candidate import Candidate, Number, Way, increase, reciprocal, reduction, same
 from fourcount.appraisal.findings.check import Orientation
@@ -15,12 +16,13 @@ from fourcount.stats.entries.entry import Method
 from fourcount.stats.entries.print_only import PRINT_METHODS
 from fourcount.stats.estimates import without_a_contrast, without_people
 from fourcount.stats.methods import METHODS
-from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.results import Counts, FractionalCounts, Gap, Interval
 
 HEAVY = frozenset(
     {"baptista-pike-mid-p", "conditional-exact", "conditional-mid-p", "clopper-pearson", "mid-p", "jeffreys"}
 )
 CENTRED = frozenset({"gart", "walter"})
+AnyCounts = TypeVar("AnyCounts", bound=FractionalCounts)
 _USUAL = ("wald", "katz", "woolf", "log")  # what papers usually print is named first
 
 
@@ -64,20 +66,22 @@ _ORIENTATIONS: dict[str, tuple[Orientation, ...]] = {
 the swapped groups."""
 
 
-def unpaired(counts: Counts, says: PrintedMeasure) -> tuple[Candidate, ...]:
-    """All that a figure of this name may be, likeliest first."""
+def unpaired(counts: Counts, says: PrintedMeasure, behind: FractionalCounts | None = None) -> tuple[Candidate, ...]:
+    """All that a figure of this name may be, likeliest first.
+
+    ``behind`` are the counts behind intervals, where clusters make those other than the table's own.
+    """
     if says == "risk":
-        return _risks(counts)
-    sides = {side: turned(counts, side) for side in _ORIENTATIONS["risk_ratio"]}
+        return _risks(counts, behind or counts)
     return tuple(
         made
         for reading in READINGS[says]
         for side in (("as-read",) if reading.seen is reciprocal else _ORIENTATIONS[reading.measure])
-        for made in _of(sides[side], reading, side)
+        for made in _of(turned(counts, side), turned(behind or counts, side), reading, side)
     )
 
 
-def turned(counts: Counts, side: Orientation) -> Counts:
+def turned(counts: AnyCounts, side: Orientation) -> AnyCounts:
     """The counts seen from one side."""
     index = (counts.index_events, counts.index_non_events)
     reference = (counts.reference_events, counts.reference_non_events)
@@ -85,7 +89,7 @@ def turned(counts: Counts, side: Orientation) -> Counts:
         index, reference = reference, index
     if side in ("other-outcome", "both-swapped"):
         index, reference = index[::-1], reference[::-1]
-    return Counts(
+    return type(counts)(
         index_events=index[0],
         index_non_events=index[1],
         reference_events=reference[0],
@@ -113,14 +117,14 @@ def _interval(function: Callable[..., Interval | Gap], given: tuple[object, ...]
     return function(*given, level)
 
 
-def _of(counts: Counts, reading: Reading, side: Orientation) -> tuple[Candidate, ...]:
+def _of(counts: Counts, behind: FractionalCounts, reading: Reading, side: Orientation) -> tuple[Candidate, ...]:
     """The sample estimate; beside an odds ratio also the conditional one, which exact methods print."""
     found = Candidate(
         measure=reading.measure,
         orientation=side,
         named=reading.named,
         estimate=partial(_ESTIMATES[reading.measure], counts),
-        ways=ways(METHODS + PRINT_METHODS, reading.measure, counts),
+        ways=ways(METHODS + PRINT_METHODS, reading.measure, behind),
         seen=reading.seen,
         label=reading.label,
     )
@@ -139,11 +143,17 @@ def _of(counts: Counts, reading: Reading, side: Orientation) -> tuple[Candidate,
     return found, conditional
 
 
-def _risks(counts: Counts) -> tuple[Candidate, ...]:
+def _risks(counts: Counts, behind: FractionalCounts) -> tuple[Candidate, ...]:
     """A printed risk may be either group's, or that of not having the event."""
     groups = (
-        ("risk_index", counts.index_events, counts.index_total),
-        ("risk_reference", counts.reference_events, counts.reference_total),
+        ("risk_index", counts.index_events, counts.index_total, behind.index_events, behind.index_total),
+        (
+            "risk_reference",
+            counts.reference_events,
+            counts.reference_total,
+            behind.reference_events,
+            behind.reference_total,
+        ),
     )
     sides: tuple[tuple[Orientation, bool], ...] = (("as-read", False), ("other-outcome", True))
     return tuple(
@@ -151,13 +161,12 @@ def _risks(counts: Counts) -> tuple[Candidate, ...]:
             measure="risk",
             orientation=side,
             named=True,
-            estimate=partial(_risk, seen, total),
-            ways=ways(METHODS + PRINT_METHODS, "risk", seen, total),
+            estimate=partial(_risk, total - events if other else events, total),
+            ways=ways(METHODS + PRINT_METHODS, "risk", people - part if other else part, people),
             label=label,
         )
         for side, other in sides
-        for label, events, total in groups
-        for seen in (total - events if other else events,)
+        for label, events, total, part, people in groups
     )
 
 

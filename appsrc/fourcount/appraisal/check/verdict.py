@@ -7,7 +7,7 @@ from collections.abc import Iterable, Iterator
 from fourcount.appraisal.check.candidate import Candidate, Way
 from fourcount.appraisal.check.digits import last_digits, transposed
 from fourcount.appraisal.check.misses import Miss, near_miss
-from fourcount.appraisal.check.search import Hit, has_limits, hit, nearest_way, wanted_level
+from fourcount.appraisal.check.search import OTHER_ANALYSES, Hit, has_limits, hit, nearest_way, wanted_level
 from fourcount.appraisal.check.symmetry import Triple, mirrored_limit, ordered, slips, symmetric, triple_of
 from fourcount.appraisal.findings.check import Finding
 from fourcount.record.entry.readings import PrintedFigure
@@ -81,7 +81,8 @@ def _whole(figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candi
         yield Finding(key="adjusted-is-crude", facts=facts)
         return
     if first.at_level:
-        yield Finding(key=WHOLE[first.place], facts=facts, agrees=first.place == 0)
+        key = "other-analysis" if _otherwise(first) else WHOLE[first.place]
+        yield Finding(key=key, facts=facts, agrees=first.place == 0)
     else:
         printed: Facts = {} if figure.level is None else {"printed_level": figure.level}
         yield Finding(key="other-level", facts={**facts, **printed, "place": first.place})
@@ -103,7 +104,7 @@ def _estimate_alone(
         yield _missed(figure, first.candidate, miss)
         return
     facts = {**_facts(first, first.match.method), **_own(figure, first, candidates)}
-    yield Finding(key=ESTIMATE[first.place], facts=facts)
+    yield Finding(key="estimate-other-analysis" if _otherwise(first) else ESTIMATE[first.place], facts=facts)
 
 
 def _nothing_fits(figure: PrintedFigure, candidates: tuple[Candidate, ...], *, heavy: bool) -> Iterator[Finding]:
@@ -184,6 +185,10 @@ def _facts(one: Hit, methods: str) -> Facts:
 def _coarse(figure: PrintedFigure) -> bool:
     """Whether the estimate has so few digits that much fits it by chance: a third of random prints with one decimal."""
     return figure.estimate is not None and abs(last_digits(figure.estimate)) < _FEW_UNITS
+
+
+def _otherwise(first: Hit) -> bool:
+    return first.candidate.key.startswith(OTHER_ANALYSES)
 
 
 def _own(figure: PrintedFigure, first: Hit, candidates: tuple[Candidate, ...]) -> Facts:
