@@ -17,7 +17,7 @@ RISKS: dict[str, names.Group] = {"risk_reference": "reference", "risk_index": "i
 
 
 def figure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[str, ...]:
-    """The lines of a whole table: "Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409".
+    """The lines of a whole unpaired table: "Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409".
 
     Why an estimate, an interval or a limit is not there stands behind the first line in which it is missing.
     """
@@ -31,11 +31,11 @@ def figure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) 
             withheld.append(shown[key])
             continue
         line = (
-            _number_needed(shown[key], measure, outcome, level)
+            needed_text(shown[key], measure, outcome, level)
             if isinstance(measure, AnyNumberNeeded)
             else _figure(key, shown[key], outcome, findings, level)
         )
-        new = [reason for reason in _reasons(measure) if reason not in reasons]
+        new = [reason for reason in reasons_of(measure) if reason not in reasons]
         reasons.update(dict.fromkeys(new))
         given.append(". ".join((line, *new)))
     return (*given, *withheld_lines(withheld))
@@ -49,7 +49,8 @@ def withheld_lines(withheld: list[MeasureLine]) -> tuple[str, ...]:
     return tuple(f"{'; '.join(measures)}: {reason}" for reason, measures in reasons.items())
 
 
-def _number_needed(line: MeasureLine, needed: AnyNumberNeeded, outcome: Outcome, level: str) -> str:
+def needed_text(line: MeasureLine, needed: AnyNumberNeeded, outcome: Outcome, level: str) -> str:
+    """A number needed with its interval, its time and what it supposes."""
     span = names.over_span(outcome)
     over = f" {span}" if span else f", {lines.NO_SPAN}"
     return f"{limits.needed_kind(needed)} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
@@ -64,7 +65,7 @@ def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFind
     return ", ".join(part for part in (said, *_more(key, figure, outcome, findings)) if part)
 
 
-def _reasons(measure: Figure | AnyNumberNeeded) -> tuple[str, ...]:
+def reasons_of(measure: Figure | AnyNumberNeeded) -> tuple[str, ...]:
     """Why a part of a measure is not there, each reason once."""
     if isinstance(measure, AnyNumberNeeded):
         withheld = limits.withheld_needed(measure)

@@ -12,6 +12,8 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import labels, limits
 from fourcount.wording.cautions import STANDING, caution_text
+from fourcount.wording.extras import extra_lines
+from fourcount.wording.form import lacking, shown_choices
 from fourcount.wording.lines import MeasureLine, measure_lines
 from fourcount.wording.patient import patient_words
 from fourcount.wording.sentence import headline, p_sentence
@@ -19,20 +21,22 @@ from fourcount.wording.sentence import headline, p_sentence
 WIDTH = 79
 INDENT = "  "
 LONGEST_NAME = 36
+TYPED_BESIDE = ("adjusted", "clusters", "losses", "recovered")
 
 
 def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     """What the table says, what that means for one patient, and what to keep in mind."""
-    if isinstance(findings.counts, Gap):
+    if lacking(findings):
         return _joined([_wrapped(headline(outcome, findings, choices)), _wrapped(STANDING)])
     lines = measure_lines(outcome, findings, choices)
     patient = _patient(outcome, findings, choices)
     return _joined(
         [
             _wrapped(headline(outcome, findings, choices)),
-            _figures([line for line in lines if not line.withheld], choices),
+            _figures([line for line in lines if not line.withheld], shown_choices(findings, choices)),
             *map(_wrapped, withheld_lines([line for line in lines if line.withheld])),
             _wrapped(p_sentence(findings)),
+            _beside(outcome, findings, choices),
             patient,
             _cautions(findings, said=one_line(patient)),
             _wrapped(STANDING),
@@ -40,9 +44,11 @@ def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
     )
 
 
-def _figures(lines: list[MeasureLine], choices: Choices) -> str:
+def _figures(lines: list[MeasureLine], choices: Choices, *, headed: bool = True) -> str:
     """A row for every measure, with its notes below it; what is too long for the row has a line of its own."""
-    head = ("", "", limits.interval_name(choices.level), "")
+    if not lines:
+        return ""
+    head = ("", "", limits.interval_name(choices.level) if headed else "", "")
     cells = ((line.name, line.estimate, line.interval, line.detail) for line in lines)
     rows = [head, *(tuple(map(one_line, row)) for row in cells)]
     name = max(len(row[0]) for row in rows if len(row[0]) <= LONGEST_NAME)
@@ -56,6 +62,14 @@ def _figures(lines: list[MeasureLine], choices: Choices) -> str:
         written += [_wrapped(below), whole if fits else figures.rstrip()]
         written += [_wrapped("" if fits else row[3], INDENT), _wrapped(note, INDENT)]
     return "\n".join(line for line in written if line)
+
+
+def _beside(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
+    """What follows from what was typed beside the table: an adjusted effect, clusters, people lost, a printed p."""
+    lines = [line for line in extra_lines(outcome, findings, choices) if line.key.startswith(TYPED_BESIDE)]
+    given = _figures([line for line in lines if not line.withheld], shown_choices(findings, choices), headed=False)
+    withheld = withheld_lines([line for line in lines if line.withheld])
+    return "\n".join(part for part in (given, *map(_wrapped, withheld)) if part)
 
 
 def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:

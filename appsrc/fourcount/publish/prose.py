@@ -7,13 +7,15 @@ from datetime import date
 
 from fourcount.appraisal.findings import Gap, OutcomeFindings, PatientFindings
 from fourcount.publish.letter_figures import figure_lines
+from fourcount.publish.letter_forms import beside_lines, form_lines, rests_on
 from fourcount.publish.made_with import made_with
 from fourcount.publish.plain_text import one_line
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import COUNTED_FORMS, Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import exports, labels, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import STANDING_FULL, caution_text
+from fourcount.wording.form import lacking, shown_choices
 from fourcount.wording.patient import picture_heading
 from fourcount.wording.patient_sentence import patient_sentence
 from fourcount.wording.sentence import headline, p_sentence
@@ -33,14 +35,16 @@ def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, versio
         one_line(_patient(outcome, findings, choices)),
         _cautions(findings),
         one_line(" ".join(STANDING_FULL)),
-        made_with(choices, version, today),
+        made_with(shown_choices(findings, choices), version, today, findings.form),
     ]
     return "\n\n".join(paragraph for paragraph in paragraphs if paragraph) + "\n"
 
 
 def _counts(outcome: Outcome, findings: OutcomeFindings) -> str:
-    """The four counts that everything below rests on, in the reader's words."""
+    """What everything below rests on, in the reader's words."""
     counts = findings.counts
+    if findings.form not in COUNTED_FORMS:
+        return rests_on(outcome, findings)
     if isinstance(counts, Gap):
         return ""
     groups: tuple[tuple[names.Group, int, int], ...] = (
@@ -62,9 +66,12 @@ def _counts(outcome: Outcome, findings: OutcomeFindings) -> str:
 
 def _figures(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     """A list of one line for every measure, and the p."""
-    if isinstance(findings.counts, Gap):
+    if lacking(findings):
         return ""
-    return _list((*figure_lines(outcome, findings, choices), p_sentence(findings)))
+    if findings.form not in COUNTED_FORMS:
+        return _list((*form_lines(outcome, findings, choices), p_sentence(findings)))
+    beside = beside_lines(outcome, findings, choices)
+    return _list((*figure_lines(outcome, findings, choices), *beside, p_sentence(findings)))
 
 
 def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:

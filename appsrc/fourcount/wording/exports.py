@@ -5,6 +5,9 @@ from __future__ import annotations
 PICTURE_FOOT = "{standing} Fourcount {version}, {date}"
 MADE_WITH = "Calculated with Fourcount {version} on {date}; {family} intervals at {level}."
 NOT_ALL_EXACT = "The difference, the number needed and the risk ratio have score intervals, for want of exact ones."
+NO_EXACT_RATE_DIFFERENCE = "The difference of the rates has a score interval, for want of an exact one."
+POOLED_BY = "Pooled by Mantel and Haenszel."
+PRINTED_FAMILY = "printed"
 
 SHEET_HEAD = ("measure", "estimate", "low", "high", "method")
 SHEET_INFINITY = "infinity"
@@ -13,6 +16,12 @@ UNROUNDED = "Risks and differences are fractions, index minus reference; all fig
 PEOPLE_WITH_EVENT = "People {group} who {event}"
 ALL_PEOPLE = "People {group}, all"
 P_NAME = "p, two-sided"
+EVENTS_IN_GROUP = "Events {group}"
+TIME_IN_GROUP = "Person-time {group}, {unit}"
+BOTH_SIDES = "both sides"
+NEITHER_SIDE = "neither side"
+PAIRS_WITH_EVENT = "Pairs, {event}: {where}"
+PER_UNIT = "Rates and their difference are events in one of the {unit}."
 CONVERTED = "Odds ratio as a risk ratio at {baseline}"
 PATIENT = "{column}, {baseline}: {name}"
 PATIENT_ROWS = {
@@ -23,6 +32,13 @@ PATIENT_ROWS = {
 }
 
 GROUP_COUNTS = "{group}: {events} {event}, {others} {other}."
+GROUP_RATE = "{group}: {events} events in {time}."
+PAIR_COUNTS = (
+    "Pairs, {event}: {both} on both sides, {index_only} only {index}, {reference_only} only {reference}, {neither} on "
+    "neither."
+)
+PAIRS_THAT_DIFFER = "Pairs that differ, {event}: {index_only} only {index}, {reference_only} only {reference}."
+AS_PRINTED = "As printed: {text}{adjusted}."
 GROUP_RISK = "{risk} {group}"
 PER_100 = " per 100"
 EVENTS_OF_PEOPLE = "{events} of {people}"

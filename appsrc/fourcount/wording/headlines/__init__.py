@@ -5,7 +5,7 @@ Where a form has no risks to speak of, it speaks of odds, of rates, or of what t
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PairCounts, Rates
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, Rates
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import meanings

@@ -1,0 +1,66 @@
+"""The rows of a sheet that say what everything rests on: counts, pairs, person-time, strata, or the print."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Counts, OutcomeFindings, PairCounts, PrintedFigure, Rates, StrataFindings
+from fourcount.publish.sheet_rows import Row, number_cell, text_row
+from fourcount.record.outcome import Outcome
+from fourcount.wording import exports, names
+from fourcount.wording.form import given
+from fourcount.wording.pairs import pairs_that_differ
+from fourcount.wording.person_time import unit
+from fourcount.wording.printed import adjusted_words
+
+
+def basis_rows(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
+    """What was typed, number by number."""
+    found, strata = given(findings), findings.strata
+    if isinstance(strata, StrataFindings):
+        return tuple(row for one in strata.strata for row in _counts(outcome, one.counts, f"{one.label}: "))
+    if isinstance(found, Counts):
+        return _counts(outcome, found)
+    if isinstance(found, Rates):
+        return _rates(outcome, found)
+    if isinstance(found, PrintedFigure):
+        return (text_row(exports.AS_PRINTED.format(text=found.text, adjusted=adjusted_words(outcome, found))),)
+    return _pairs(outcome, findings) if findings.form == "pairs" else ()
+
+
+def _counts(outcome: Outcome, counts: Counts, before: str = "") -> tuple[Row, ...]:
+    """People with the event, and all people, of each group."""
+    groups: tuple[tuple[names.Group, int, int], ...] = (
+        ("reference", counts.reference_events, counts.reference_total),
+        ("index", counts.index_events, counts.index_total),
+    )
+    table: list[Row] = []
+    for group, events, total in groups:
+        where = names.in_group(outcome, group)
+        with_event = exports.PEOPLE_WITH_EVENT.format(group=where, event=names.event_words(outcome))
+        table.append((f"{before}{with_event}", str(events), "", "", ""))
+        table.append((f"{before}{exports.ALL_PEOPLE.format(group=where)}", str(total), "", "", ""))
+    return tuple(table)
+
+
+def _rates(outcome: Outcome, rates: Rates) -> tuple[Row, ...]:
+    groups: tuple[tuple[names.Group, int, float], ...] = (
+        ("reference", rates.reference_events, rates.reference_time),
+        ("index", rates.index_events, rates.index_time),
+    )
+    table: list[Row] = []
+    for group, events, time in groups:
+        where = names.in_group(outcome, group)
+        table.append((exports.EVENTS_IN_GROUP.format(group=where), str(events), "", "", ""))
+        table.append((exports.TIME_IN_GROUP.format(group=where, unit=unit(outcome)), number_cell(time), "", "", ""))
+    return tuple(table)
+
+
+def _pairs(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
+    pairs, differ = given(findings), pairs_that_differ(outcome, findings)
+    index, reference = names.in_group(outcome, "index"), names.in_group(outcome, "reference")
+    counts = [] if differ is None else [(f"only {index}", differ[0]), (f"only {reference}", differ[1])]
+    if isinstance(pairs, PairCounts):
+        counts = [(exports.BOTH_SIDES, pairs.both), *counts, (exports.NEITHER_SIDE, pairs.neither)]
+    event = names.event_words(outcome)
+    return tuple(
+        (exports.PAIRS_WITH_EVENT.format(event=event, where=where), str(number), "", "", "") for where, number in counts
+    )
