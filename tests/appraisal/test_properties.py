@@ -2,11 +2,8 @@
 
 from __future__ import annotations
 
-import dataclasses
 import math
-from collections.abc import Iterator
 
-import msgspec
 from hypothesis import assume, example, given
 from hypothesis import strategies as st
 
@@ -16,6 +13,7 @@ from fourcount.appraisal.findings import GAP_KEYS, MEASURES, Figure, Gap, Interv
 from fourcount.record.outcome import DESIGNS, EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import FAMILIES, Choices
 from fourcount.stats.results import GAP_KEYS as NUMBER_GAP_KEYS
+from held import everything
 
 KNOWN_GAPS = set(GAP_KEYS) | set(NUMBER_GAP_KEYS)
 KNOWN_CAUTIONS = [rule.key for rule in CAUTIONS]
@@ -50,21 +48,6 @@ def outcome(cells, **rest):
     a, b, c, d = map(str, cells)
     table = EventsAndOthers(first_left_text=a, first_right_text=b, second_left_text=c, second_right_text=d)
     return Outcome(table=table, **rest)
-
-
-def everything(thing: object) -> Iterator[object]:
-    """The thing and all that it holds, at any depth."""
-    yield thing
-    if isinstance(thing, msgspec.Struct):
-        parts = [getattr(thing, name) for name in thing.__struct_fields__]
-    elif dataclasses.is_dataclass(thing):
-        parts = [getattr(thing, field.name) for field in dataclasses.fields(thing)]
-    elif isinstance(thing, dict):
-        parts = list(thing.values())
-    else:
-        parts = list(thing) if isinstance(thing, tuple) else []
-    for part in parts:
-        yield from everything(part)
 
 
 @given(questions())

@@ -19,13 +19,15 @@ __all__ = ["CAUTIONS", "Case", "Rule", "cautions_for"]
 class Rule:
     """A caution: its key, when it holds, of which forms it is asked, and where it comes from.
 
-    A rule answers with the facts for its sentence, with None, or with the facts of several sentences.
+    A rule answers with the facts for its sentence, with None, or with the facts of several sentences. One that is
+    ``about_cells`` is asked even where the table gives no figure at all.
     """
 
     key: str
     holds: Callable[[Case], rules.Facts | tuple[rules.Facts, ...] | None]
     source: str
     forms: tuple[Form, ...] = tuple(FORMS)
+    about_cells: bool = False
 
 
 TABLES: tuple[Form, ...] = (*COUNTED_FORMS, "strata")
@@ -37,7 +39,7 @@ WITHOUT_CLUSTERS: tuple[Form, ...] = ("strata", "pairs", "person-time")
 
 CAUTIONS: tuple[Rule, ...] = (
     *(
-        Rule(key=key, holds=partial(rules.used_though_marked, key=key), source="common practice")
+        Rule(key=key, holds=partial(rules.used_though_marked, key=key), source="common practice", about_cells=True)
         for key in ("read-as", "percent-disagrees", "percent-several", "percent-none")
     ),
     Rule(key="index-looks-like-control", holds=rules.index_looks_like_control, source="common practice"),
@@ -245,7 +247,8 @@ def cautions_for(case: Case) -> tuple[Caution, ...]:
     """The cautions that hold, in the table's order."""
     held: list[Caution] = []
     for rule in CAUTIONS:
-        facts = rule.holds(case) if case.form in rule.forms else None
+        asked = case.form in rule.forms and (rule.about_cells or case.figures)
+        facts = rule.holds(case) if asked else None
         if facts is not None:
             several = facts if isinstance(facts, tuple) else (facts,)
             held += [Caution(key=rule.key, facts=one) for one in several]

@@ -2,40 +2,98 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Counts, Gap, Interval
-from fourcount.appraisal.gating import SUPPORT
-from fourcount.record.outcome import Design
-from fourcount.stats.methods import METHODS, TESTS
+from collections.abc import Mapping
+from typing import Any
+
+from fourcount.appraisal.clusters import clusters_of
+from fourcount.appraisal.findings import (
+    Counts,
+    Gap,
+    Interval,
+    OutcomeFindings,
+    PairCounts,
+    Rates,
+    StrataFindings,
+    TimedRisks,
+)
+from fourcount.appraisal.gating import (
+    SUPPORT,
+    Withheld,
+    support_of,
+    withheld_of_pairs,
+    withheld_of_rates,
+    withheld_of_timed,
+)
+from fourcount.record.outcome import Design, Outcome
+from fourcount.stats import pairs as pair_counts
+from fourcount.stats.entries.entry import Method, Test
+from fourcount.stats.methods import (
+    METHODS,
+    PAIR_METHODS,
+    PAIR_TESTS,
+    RATE_METHODS,
+    RATE_TESTS,
+    STRATA_METHODS,
+    STRATA_TESTS,
+    TESTS,
+    TIMED_METHODS,
+)
+from fourcount.stats.results import FractionalCounts
 
 Intervals = dict[str, Interval | Gap]
+Arguments = Mapping[str, tuple[str, tuple[Any, ...]]]
+"""By measure: the measure of its methods in the table of methods, and what they take before the level."""
 
-_METHODS_OF = {
-    "risk_index": "risk",
-    "risk_reference": "risk",
-    "risk_difference": "risk_difference",
-    "risk_ratio": "risk_ratio",
-    "odds_ratio": "odds_ratio",
-}
+_RISKS = tuple(method for method in METHODS if method.measure == "risk")
+
+
+def every_interval(outcome: Outcome, findings: OutcomeFindings, level: float) -> dict[str, Intervals]:
+    """The interval of each method by measure and by the method's key, whatever the form of print.
+
+    A measure that the design withholds is a Gap, and so is every interval where clusters leave none. Printed risks
+    keep the level of their limits. An effect alone, and a table that is not whole, have no methods.
+    """
+    given, clusters = findings.given, clusters_of(outcome)
+    if isinstance(given, Counts):
+        without = clusters.elsewhere if findings.form == "strata" else None
+        behind = without or clusters.behind(given) or given
+        withheld = support_of(outcome).withheld
+        crude = _every(METHODS, _of_counts(given if isinstance(behind, Gap) else behind), withheld, level, behind)
+        return {**crude, **_pooled(findings, withheld, level, without)}
+    if isinstance(given, PairCounts):
+        methods = (*_RISKS, *PAIR_METHODS)
+        return _every(methods, _of_pairs(given), withheld_of_pairs(outcome), level, clusters.elsewhere)
+    if isinstance(given, Rates):
+        return _every(RATE_METHODS, _of_rates(given), withheld_of_rates(outcome.design), level, clusters.elsewhere)
+    if isinstance(given, TimedRisks):
+        return _every(TIMED_METHODS, _of_timed(given), withheld_of_timed(outcome.design), given.level, None)
+    return {}
+
+
+def every_p(outcome: Outcome, findings: OutcomeFindings) -> dict[str, float | Gap]:
+    """The two-sided p of each test of the form, by the test's key; those of strata are of all of them."""
+    given, clusters = findings.given, clusters_of(outcome)
+    if isinstance(findings.test, Gap):
+        return {}
+    if isinstance(findings.strata, StrataFindings):
+        counts = tuple(stratum.counts for stratum in findings.strata.strata)
+        return _every_test(STRATA_TESTS, counts, clusters.elsewhere)
+    if isinstance(given, Counts):
+        behind = clusters.behind(given) or given
+        return _every_test(TESTS, given if isinstance(behind, Gap) else behind, behind)
+    if isinstance(given, PairCounts):
+        return _every_test(PAIR_TESTS, given, clusters.elsewhere)
+    return _every_test(RATE_TESTS, given, clusters.elsewhere) if isinstance(given, Rates) else {}
 
 
 def every_method(counts: Counts, design: Design, level: float) -> dict[str, Intervals]:
-    """The interval of each method by measure and by the method's key; a measure the design withholds is a Gap."""
-    withheld = SUPPORT[design].withheld
-    return {
-        measure: {
-            method.key: Gap(withheld[measure])
-            if measure in withheld
-            else method.interval(*_arguments(measure, counts), level)
-            for method in METHODS
-            if method.measure == kind
-        }
-        for measure, kind in _METHODS_OF.items()
-    }
+    """The same of four counts alone, of people whom nothing is known of but their design."""
+    return _every(METHODS, _of_counts(counts), SUPPORT[design].withheld, level, None)
 
 
 def every_test(counts: Counts) -> dict[str, float | Gap]:
     """The two-sided p of each test of no association, by the test's key."""
-    return {test.key: test.p(counts) for test in TESTS}
+    return _every_test(TESTS, counts, None)
 
 
 def conditional_odds_ratio(counts: Counts) -> float | Gap:
@@ -45,9 +103,75 @@ def conditional_odds_ratio(counts: Counts) -> float | Gap:
     return estimate(counts)
 
 
-def _arguments(measure: str, counts: Counts) -> tuple[int, int] | tuple[Counts]:
-    if measure == "risk_index":
-        return counts.index_events, counts.index_total
-    if measure == "risk_reference":
-        return counts.reference_events, counts.reference_total
-    return (counts,)
+def _every(
+    methods: tuple[Method, ...], arguments: Arguments, withheld: Withheld, level: float, without: object
+) -> dict[str, Intervals]:
+    return {
+        measure: {
+            method.key: _interval(method, values, withheld.get(measure), level, without)
+            for method in methods
+            if method.measure == kind
+        }
+        for measure, (kind, values) in arguments.items()
+    }
+
+
+def _interval(
+    method: Method, values: tuple[Any, ...], withheld: str | None, level: float, without: object
+) -> Interval | Gap:
+    if withheld is not None:
+        return Gap(withheld)
+    if isinstance(without, Gap):
+        return without
+    interval = method.interval(*values, level)
+    return Gap("cluster-no-exact") if isinstance(interval, Gap) and interval.key == "not-whole" else interval
+
+
+def _every_test(tests: tuple[Test, ...], counts: Any, without: object) -> dict[str, float | Gap]:
+    found: dict[str, float | Gap] = {}
+    for test in tests:
+        p = without if isinstance(without, Gap) else test.p(counts)
+        found[test.key] = Gap("cluster-no-exact") if isinstance(p, Gap) and p.key == "not-whole" else p
+    return found
+
+
+def _pooled(findings: OutcomeFindings, withheld: Withheld, level: float, without: Gap | None) -> dict[str, Intervals]:
+    if not isinstance(findings.strata, StrataFindings):
+        return {}
+    counts = tuple(stratum.counts for stratum in findings.strata.strata)
+    arguments = {key: (key, (counts,)) for key in findings.strata.pooled}
+    reasons = {key: withheld[crude] for key in arguments if (crude := key.removeprefix("pooled_")) in withheld}
+    return _every(STRATA_METHODS, arguments, reasons, level, without)
+
+
+def _of_counts(counts: FractionalCounts) -> Arguments:
+    return {
+        "risk_index": ("risk", (counts.index_events, counts.index_total)),
+        "risk_reference": ("risk", (counts.reference_events, counts.reference_total)),
+        "risk_difference": ("risk_difference", (counts,)),
+        "risk_ratio": ("risk_ratio", (counts,)),
+        "odds_ratio": ("odds_ratio", (counts,)),
+    }
+
+
+def _of_pairs(pairs: PairCounts) -> Arguments:
+    return {
+        "pair_risk_index": ("risk", (pair_counts.index_events(pairs), pairs.total)),
+        "pair_risk_reference": ("risk", (pair_counts.reference_events(pairs), pairs.total)),
+        "pair_difference": ("pair_difference", (pairs,)),
+        "pair_ratio": ("pair_ratio", (pairs,)),
+        "pair_odds_ratio": ("pair_odds_ratio", (pairs,)),
+    }
+
+
+def _of_rates(rates: Rates) -> Arguments:
+    return {
+        "rate_index": ("rate", (rates.index_events, rates.index_time)),
+        "rate_reference": ("rate", (rates.reference_events, rates.reference_time)),
+        "rate_difference": ("rate_difference", (rates,)),
+        "rate_ratio": ("rate_ratio", (rates,)),
+    }
+
+
+def _of_timed(timed: TimedRisks) -> Arguments:
+    return {"risk_difference": ("timed_difference", (timed,)), "risk_ratio": ("timed_ratio", (timed,))}

@@ -16,6 +16,7 @@ from fourcount.appraisal.starting_risk import typed_risk
 from fourcount.record.entry.readings import Proportion
 from fourcount.record.outcome import Outcome
 from fourcount.stats.fragility import fragility
+from fourcount.stats.methods import slow
 
 FOLLOWED = ("trial", "cohort")
 """The designs that follow people, and so can lose them."""
@@ -71,7 +72,7 @@ def _fragility(counts: object, clusters: ReadClusters, losses: ReadLosses, pace:
         return None
     if clusters.clusters is not None:
         return Gap("clusters-not-here")
-    if pace.without_numpy:
+    if pace.without_numpy or (pace.deferring and slow(counts, "exact")):
         return Gap("follows")
     found = fragility(counts)
     if isinstance(found, Gap):
