@@ -31,7 +31,7 @@ def figure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) 
             withheld.append(shown[key])
             continue
         line = (
-            needed_text(shown[key], measure, outcome, level)
+            needed_text(shown[key], outcome, level)
             if isinstance(measure, AnyNumberNeeded)
             else _figure(key, shown[key], outcome, findings, level)
         )
@@ -49,11 +49,12 @@ def withheld_lines(withheld: list[MeasureLine]) -> tuple[str, ...]:
     return tuple(f"{'; '.join(measures)}: {reason}" for reason, measures in reasons.items())
 
 
-def needed_text(line: MeasureLine, needed: AnyNumberNeeded, outcome: Outcome, level: str) -> str:
+def needed_text(line: MeasureLine, outcome: Outcome, level: str) -> str:
     """A number needed with its interval, its time and what it supposes."""
     span = names.over_span(outcome)
     over = f" {span}" if span else f", {lines.NO_SPAN}"
-    return f"{limits.needed_kind(needed)} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
+    name = line.name.removesuffix(lines.IN_THE_STUDY)
+    return f"{name} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
 
 
 def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFindings, level: str) -> str:

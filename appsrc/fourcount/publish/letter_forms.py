@@ -40,7 +40,7 @@ def form_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) ->
             continue
         measure = measure_of(line.key, findings)
         if isinstance(measure, AnyNumberNeeded):
-            text, why = needed_text(line, measure, outcome, level), reasons_of(measure)
+            text, why = needed_text(line, outcome, level), reasons_of(measure)
         else:
             why = () if isinstance(measure, Gap) else reasons_of(measure)
             text = figure_text(line, level, why)

@@ -19,7 +19,7 @@ from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.form import measure_of, shown_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines.strata import STRATUM_KEY
-from fourcount.wording.p_value import own_p
+from fourcount.wording.p_value import own_p, why_no_p
 from fourcount.wording.person_time import unit
 
 # Behind any blanks, a spreadsheet takes these for the beginning of a formula, and a quotation mark for that of a field
@@ -85,7 +85,7 @@ def _measures(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> 
 def _p(findings: OutcomeFindings) -> Row:
     test = own_p(findings)
     if isinstance(test, Gap):
-        return (exports.P_NAME, "", "", "", gap_text(test))
+        return (exports.P_NAME, "", "", "", why_no_p(test))
     reason = f"; {gap_text(test.p)}" if isinstance(test.p, Gap) else ""
     return (exports.P_NAME, number_cell(test.p), "", "", f"{test.method}{reason}")
 

@@ -3,9 +3,11 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import Gap, PatientFindings
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import EffectOnly, Outcome, Strata
 from fourcount.wording import limits, names, numbers
 
+POOLED = "pooled "
+ADJUSTED = "adjusted "
 OWN_RISK = "At the study’s own starting {risk}."
 GIVEN_RISK = "Starting risk {baseline}{source}, {effect} {value}{interval} kept constant."
 
@@ -19,7 +21,15 @@ def basis(outcome: Outcome, patient: PatientFindings) -> str:
     return GIVEN_RISK.format(
         baseline=numbers.percent_given(patient.baseline),
         source=f" ({source})" if source else "",
-        effect=names.effect_name(outcome, patient.effect),
+        effect=f"{_whose(outcome)}{names.effect_name(outcome, patient.effect)}",
         value=numbers.ratio(carried.estimate),
         interval=limits.bracketed(limits.ratio_interval(carried.interval, carried.estimate)),
     )
+
+
+def _whose(outcome: Outcome) -> str:
+    """Which of several effects it is: the pooled one of strata, the adjusted one of a print."""
+    if isinstance(outcome.table, Strata):
+        return POOLED
+    adjusted = isinstance(outcome.table, EffectOnly) and outcome.adjusted_for_text.strip()
+    return ADJUSTED if adjusted else ""

@@ -44,6 +44,7 @@ GAP_TEXTS = {
     "no-reference-events": "Nobody in the reference group had the event, where the bare formula has no interval.",
     "prevalence-out-of-range": "The share of people exposed lies from 0% to 100%.",
     "loss-ratio-out-of-range": "The ratio of risks among the lost is a number from 0 upwards.",
+    "no-width": "The limits would fall together, and an interval of zero width is withheld.",
     "endless-log": "An estimate or a limit is 0 or infinite, where its logarithm has no end.",
     "endless-limit": "A limit is infinite, so no standard error follows from it.",
     "p-out-of-range": "A p lies above 0 and goes up to 1.",

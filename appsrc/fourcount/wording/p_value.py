@@ -40,11 +40,16 @@ def p_sentence(findings: OutcomeFindings) -> str:
     """The p of the family's own test with the test's name, and what it does not say."""
     probability = own_p(findings)
     if isinstance(probability, Gap):
-        return NO_TEST if probability.key == NO_COUNTS else gap_text(probability)
+        return why_no_p(probability)
     if isinstance(probability.p, Gap):
         return P_FOLLOWS if probability.p.key == "follows" else f"{NO_P}{clause(gap_text(probability.p))}"
     said = _by_test(probability.p, probability.method, findings.form)
     return " ".join(part for part in (said, NOT_THE_SIZE, _homogeneity(findings.strata)) if part)
+
+
+def why_no_p(gap: Gap) -> str:
+    """Why a form, or a table, has no p."""
+    return NO_TEST if gap.key == NO_COUNTS else gap_text(gap)
 
 
 def test_title(key: str) -> str:

@@ -29,7 +29,7 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
     second = f"of {numbers.whole(people)} {index} {_people(patient.with_.estimate, people)}"
     change, interval = carried.change(patient.difference, people), carried.interval(patient, choices, people)
     said = f"{first}, {second}: {change[:1].lower()}{change[1:]}{f' ({interval})' if interval else ''}"
-    told = patient.number_needed == findings.measures["number_needed"]  # a design without one has said so already
+    told = patient.number_needed == findings.measures.get("number_needed")  # a design without one has said so already
     needed = "" if told else carried.number_needed(patient.number_needed, outcome)
     return " ".join(part for part in (f"{said}.", needed, *carried.reasons(patient)) if part)
 

@@ -24,11 +24,11 @@ from fourcount.wording.lines.unpaired import (
     unpaired_lines,
     whole_needed,
 )
-from fourcount.wording.lines.words import FOLLOWS, KINDS, NO_SPAN, NOT_DETERMINED, WITHHELD, Kind
+from fourcount.wording.lines.words import FOLLOWS, IN_THE_STUDY, KINDS, NO_SPAN, NOT_DETERMINED, WITHHELD, Kind
 
 __all__ = [
-    "FOLLOWS", "KINDS", "NOT_DETERMINED", "NO_SPAN", "SCREEN_ORDER", "WITHHELD", "Kind", "LineGroup", "MeasureLine",
-    "baseline_text", "conversion_text", "estimate_text", "family_name", "interval_text", "measure_lines",
+    "FOLLOWS", "IN_THE_STUDY", "KINDS", "NOT_DETERMINED", "NO_SPAN", "SCREEN_ORDER", "WITHHELD", "Kind", "LineGroup",
+    "MeasureLine", "baseline_text", "conversion_text", "estimate_text", "family_name", "interval_text", "measure_lines",
     "measure_name", "told_once", "whole_needed",
 ]  # fmt: skip
 

@@ -9,7 +9,7 @@ from fourcount.wording import limits, names, numbers
 from fourcount.wording.form import given, lacking, measure_of
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.unpaired import beyond, needed_line, relative_note
-from fourcount.wording.lines.words import method_word
+from fourcount.wording.lines.words import IN_THE_STUDY, method_word
 from fourcount.wording.pairs import pairs_that_differ
 
 PAIRS_ORDER = (
@@ -32,7 +32,7 @@ def pair_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) ->
 def pair_name(key: str, outcome: Outcome, needed: AnyNumberNeeded | None = None) -> str:
     """What a line of pairs calls its measure."""
     if key == "number_needed":
-        return f"{limits.needed_kind(needed)} in the study"
+        return f"{limits.needed_kind(needed)}{IN_THE_STUDY}"
     return {
         "pair_difference": "Difference, paired",
         "pair_risk_reference": f"Risk, {names.label_within(outcome, 'reference')}",

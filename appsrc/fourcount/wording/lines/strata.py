@@ -21,7 +21,7 @@ from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.text import estimate_text, interval_text
 from fourcount.wording.lines.unpaired import conversion_text, measure_name, relative_note, unpaired_line
-from fourcount.wording.lines.words import method_word
+from fourcount.wording.lines.words import IN_THE_STUDY, method_word
 
 ORDER = (
     "pooled_risk_difference",
@@ -61,7 +61,7 @@ def strata_name(key: str, outcome: Outcome, needed: AnyNumberNeeded | None = Non
     """What a line of strata calls its measure: pooled or crude."""
     if key.startswith("pooled_"):
         return POOLED.format(name=measure_name(key.removeprefix("pooled_"), outcome))
-    return CRUDE.format(name=measure_name(key, outcome, needed).removesuffix(" in the study"))
+    return CRUDE.format(name=measure_name(key, outcome, needed).removesuffix(IN_THE_STUDY))
 
 
 def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> MeasureLine:

@@ -11,7 +11,7 @@ from fourcount.stats.number_needed import whole_number_needed
 from fourcount.wording import limits, names, numbers
 from fourcount.wording.half_added import half_added
 from fourcount.wording.lines.line import LineGroup, MeasureLine, blank_line, figure_line, withheld_line
-from fourcount.wording.lines.words import KINDS, NO_SPAN
+from fourcount.wording.lines.words import IN_THE_STUDY, KINDS, NO_SPAN
 
 SCREEN_ORDER = (
     "risk_difference",
@@ -51,7 +51,7 @@ def measure_name(key: str, outcome: Outcome, needed: AnyNumberNeeded | None = No
     """What a line calls its measure."""
     risk = names.sentence_case(names.risk_name(outcome))
     if key == "number_needed":
-        return f"{limits.needed_kind(needed)} in the study"
+        return f"{limits.needed_kind(needed)}{IN_THE_STUDY}"
     return {
         "risk_difference": "Difference",
         "risk_reference": f"{risk}, {names.label_within(outcome, 'reference')}",

@@ -32,6 +32,7 @@ KINDS: dict[str, Kind] = {
 }
 """Measures of one kind are written alike and share a scale."""
 
+IN_THE_STUDY = " in the study"
 NO_SPAN = "time span not given"
 NOT_DETERMINED = "not determined"
 WITHHELD = "withheld"
