@@ -54,7 +54,7 @@ def _table(before: Table, pasted: Pasted) -> Table:
         strata = tuple(
             Stratum(label_text=storable(label), **_cells(pair)) for pair, label in zip(pairs, labels, strict=False)
         )
-        return Strata(strata=strata or (Stratum(), Stratum()), of_total=before.of_total)
+        return Strata(strata=strata or (Stratum(), Stratum()), of_total=pasted.strata_of_total)
     if isinstance(before, EffectOnly):
         return EffectOnly()
     table = replace(before, **{**dict.fromkeys(CELLS, ""), **_cells(pasted.groups)})

@@ -6,7 +6,7 @@ import re
 from fractions import Fraction
 
 from fourcount.record.entry.cell import LARGEST_COUNT, read_cell
-from fourcount.record.entry.digits import LONGEST, decimal_number, plain, specimen
+from fourcount.record.entry.digits import LONGEST, decimal_number, plain, specimen, whole_number
 from fourcount.record.entry.readings import Blank, Count, Mark, Unreadable
 
 _AMOUNT = re.compile(r"(?P<minus>-)? *(?P<number>[0-9][0-9.,\u00b7']*|[.,\u00b7][0-9]+)(?: *(?:x|\u00d7|times))?", re.I)
@@ -48,7 +48,7 @@ def marks_of_fields(readings: dict[str, object]) -> tuple[Mark, ...]:
 
 
 def _number(text: str) -> Fraction | None:
-    cell = read_cell(text)
-    if isinstance(cell, Count):
-        return Fraction(cell.value)
+    grouped = whole_number(text)
+    if grouped is not None:
+        return Fraction(grouped)
     return decimal_number(text if text[0].isdigit() else f"0{text}")
