@@ -17,7 +17,7 @@ from fourcount.record.entry.pasted.strata_rows import Strata, strata_of
 from fourcount.record.entry.printed import read_paper
 from fourcount.record.entry.readings import Pasted, PastedGroup
 from fourcount.record.entry.tokens import LONGEST_TEXT
-from fourcount.record.outcome import Layout
+from fourcount.record.outcome import Layout, PaperMeasure
 
 _MOST_STRATA = 50
 
@@ -39,15 +39,20 @@ def read_block(text: str) -> Pasted | None:
     if found is None:
         return None
     doubts = dict.fromkeys((*found.ambiguous, *(("comma-pairs",) if grid.comma_pairs else ())))
-    paper = "; ".join(" ".join(piece.split()) for piece in matrix.results)
-    figures = read_paper(paper, "risk_ratio").figures if paper else ()
+    pieces = [" ".join(piece.split()) for piece in matrix.results]
+    paper = "; ".join(pieces)
+    figures = tuple(figure for piece in pieces for figure in read_paper(piece, _usual(piece)).figures)
     return msgspec.structs.replace(
         found, ambiguous=tuple(doubts), figures=figures, paper_text=paper if figures else "", source="block"
     )
 
 
+def _usual(piece: str) -> PaperMeasure:
+    return "risk_difference" if "difference" in piece.casefold() else "risk_ratio"
+
+
 def _understood(matrix: Matrix, text: str) -> Pasted | None:
-    small, left_out = _without_sums(matrix)
+    small = _without_sums(matrix)
     pairs = pair_table(small, text)
     if pairs:
         return pairs
@@ -57,7 +62,7 @@ def _understood(matrix: Matrix, text: str) -> Pasted | None:
     if strata:
         return _table(strata.tables[0], strata.doubts, "across")
     down = _down(matrix)
-    across = _down(matrix.turned())
+    across = _down(msgspec.structs.replace(matrix.turned(), corner=""))
     layouts: list[tuple[Understood, Layout]] = [(down, "down")] if down else []
     layouts += [(across, "across")] if across else []
     if not layouts:
@@ -68,10 +73,10 @@ def _understood(matrix: Matrix, text: str) -> Pasted | None:
     return _table(best, doubts, layout)
 
 
-def _without_sums(matrix: Matrix) -> tuple[Matrix, bool]:
+def _without_sums(matrix: Matrix) -> Matrix:
     rows = [row for row, label in enumerate(matrix.labels) if not is_sum(label.label)]
     columns = [place for place, head in enumerate(matrix.heads) if not is_sum(head.label)]
-    return matrix.only(rows, columns), len(rows) < len(matrix.labels) or len(columns) < len(matrix.heads)
+    return matrix.only(rows, columns)
 
 
 def _down(matrix: Matrix) -> Understood | None:

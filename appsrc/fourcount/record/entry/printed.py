@@ -30,9 +30,9 @@ def read_paper(text: str, measure: PaperMeasure, field: str = "paper_text") -> P
     A figure without a name is of ``measure``; an unnamed percentage beside a ratio is a risk, or a risk difference
     where it has limits or a minus. Differences in points, with a percent sign or above 1 are percentages.
     """
-    printed = take_apart(text)
-    if len(printed.shown) > LONGEST_TEXT:
+    if len(text) > LONGEST_TEXT:
         return PaperReading(marks=(_mark(field, "paper-too-long", text),))
+    printed = take_apart(text)
     if not printed.tokens:
         return PaperReading()
     grammar = Grammar(printed.tokens, unnamed=True)

@@ -2,23 +2,28 @@
 
 from __future__ import annotations
 
+from bisect import bisect_left, bisect_right
 from collections.abc import Iterator, Sequence
+from itertools import pairwise
+
+import msgspec
 
 from fourcount.record.entry.pasted.doubts import PASTE_DOUBTS
 from fourcount.record.entry.pasted.event_words import event_words, time_span
 from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
-from fourcount.record.entry.pasted.quantities import Phrases, Quantity, gives
+from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity, gives
 from fourcount.record.entry.pasted.totals import shared_total, with_totals
-from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, NOT_COUNTED
+from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, INTRODUCERS, NOT_PEOPLE
 from fourcount.record.entry.printed import named_figures
-from fourcount.record.entry.readings import Pasted, PastedGroup, PrintedFigure
+from fourcount.record.entry.readings import Pasted, PastedGroup
 from fourcount.record.entry.tokens import LONGEST_TEXT, Print, Token, as_sentence, take_apart
 from fourcount.record.outcome import Form
 
 __all__ = ["PASTE_DOUBTS", "read_sentence"]
 
-_MOST_TOKENS = 3000
-_MOST_PAIRS = 60
+_MOST_TOKENS = 1500
+_MOST_NUMBERS = 200
+_MOST_PAIRS = 12
 _EFFECTS = ("risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference")
 _GROUP_WORDS = GROUP_NOUNS | {"groups", "arms", "placebo", "respectively", "control"}
 
@@ -32,7 +37,8 @@ def read_sentence(text: str) -> Pasted | None:
     if not any(character.isdecimal() for character in text[:LONGEST_TEXT]) or len(text) > LONGEST_TEXT:
         return None
     printed = as_sentence(take_apart(text))
-    if len(printed.tokens) > _MOST_TOKENS:
+    numbers = sum(token.kind == "number" for token in printed.tokens)
+    if len(printed.tokens) > _MOST_TOKENS or not 1 < numbers <= _MOST_NUMBERS:
         return None
     return SentenceReader(printed).read()
 
@@ -65,14 +71,26 @@ class SentenceReader:
         place = 0
         while place < len(self.tokens):
             quantity = phrases.quantity_at(place) if self.tokens[place].kind == "number" else None
-            if quantity and not self._of_something_else(quantity):
+            if quantity and bare and quantity.events and self.tokens[place - 1].text == "=":
+                quantity = None
+            place = quantity.after if quantity else place + 1
+            if quantity and not self._of_something_else(quantity) and not self._joined(found, quantity):
                 found.append(quantity)
-                place = quantity.after
-            elif quantity:
-                place = quantity.after
-            else:
-                place += 1
         return found
+
+    def _joined(self, found: list[Quantity], quantity: Quantity) -> bool:
+        """Put a percentage that stands alone to the count that it is of, "38 of 412 on foam mattresses (9.2%)"."""
+        percent = quantity.percent
+        if not found or percent is None or quantity.events or quantity.complete:
+            return False
+        last = found[-1]
+        bracketed = self.tokens[quantity.first - 1].text in OPENING
+        if last.events is None or last.total is None or last.percent is not None or quantity.first - last.after > 12:
+            return False
+        if not (bracketed or gives(percent, last.events.whole or 0, last.total.whole or 0)):
+            return False
+        found[-1] = msgspec.structs.replace(last, percent=percent)
+        return True
 
     def _of_something_else(self, quantity: Quantity) -> bool:
         """Whether the words around a number of a number say that it counts no people, or measures a test."""
@@ -82,11 +100,11 @@ class SentenceReader:
             return True
         if quantity.percent is not None or quantity.time is not None:
             return False
-        return bool(NOT_COUNTED & (before | near))
+        return bool(NOT_PEOPLE & (before | near)) or {"blood", "pressure"} <= before
 
     def _pairs(self, quantities: Sequence[Quantity], *, bare: bool) -> Iterator[tuple[Quantity, Quantity]]:
         """Neighbours of one kind, complete ones first; not more of them than a reader would look at."""
-        fitting = [pair for pair in zip(quantities, quantities[1:], strict=False) if self._alike(*pair)]
+        fitting = [pair for pair in pairwise(quantities) if self._alike(*pair)]
         if not bare:
             yield from [pair for pair in fitting if pair[0].complete and pair[1].complete][:_MOST_PAIRS]
         yield from [pair for pair in fitting if not (pair[0].complete and pair[1].complete)][:_MOST_PAIRS]
@@ -94,7 +112,7 @@ class SentenceReader:
     def _alike(self, first: Quantity, second: Quantity) -> bool:
         """Whether two quantities are of one kind and in the same or in neighbouring sentences."""
         kinds = [(each.events is not None, each.time is not None, each.low is not None) for each in (first, second)]
-        borders = sum(first.after <= end <= second.first for end in self.ends)
+        borders = bisect_right(self.ends, second.first) - bisect_left(self.ends, first.after)
         return kinds[0] == kinds[1] and borders <= 1
 
     def _table(self, first: Quantity, second: Quantity, quantities: Sequence[Quantity], *, bare: bool) -> Pasted | None:
@@ -152,8 +170,12 @@ class SentenceReader:
         effect = any(figure.measure in _EFFECTS for figure in self.figures)
         if COMPARATORS & between or _GROUP_WORDS & around or effect:
             return True
-        introduced = all(labels) and (first.total is None or second.total is None or not strictly)
-        return introduced and not strictly
+        if strictly or not all(labels):
+            return False
+        told = all(each.percent is not None and _agrees(each) for each in (first, second))
+        behind = {token.lower for token in self.tokens[second.after : bounds[1]]}
+        ahead = {token.lower for token in self.tokens[bounds[0] : first.first]}
+        return told or bool(INTRODUCERS & between and INTRODUCERS & (behind | ahead))
 
     def _pasted(
         self,
@@ -164,6 +186,7 @@ class SentenceReader:
         quantities: Sequence[Quantity],
     ) -> Pasted:
         form = _form(pair)
+        words = event_words(self.printed, pair[0], pair[1], *bounds)
         if any(each.percent and each.events and each.total and not _agrees(each) for each in pair):
             doubts.append("percent-disagrees")
         others = [
@@ -178,7 +201,7 @@ class SentenceReader:
         return Pasted(
             form=form,
             groups=tuple(_group(form, quantity, label) for quantity, label in zip(pair, labels, strict=True)),
-            words=event_words(self.printed, pair[0], pair[1], *bounds),
+            words="" if words.casefold() in (label.casefold() for label in labels) else words,
             unit=pair[0].unit or pair[1].unit,
             span=time_span(self.printed, *bounds) or time_span(self.printed, 0, len(self.tokens)),
             figures=self.figures,

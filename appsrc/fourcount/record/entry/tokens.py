@@ -17,7 +17,7 @@ from fourcount.record.entry.number_words import UNITS, spelled_number
 
 Kind = Literal["number", "word", "mark", "break"]
 
-LONGEST_TEXT = 12_000
+LONGEST_TEXT = 6_000
 """Longer text is a document, not a table or a sentence. It also keeps every later step short."""
 
 _LONGEST_NUMBER = 15
@@ -32,7 +32,7 @@ _TOKEN = re.compile(
     r"(?P<version>[0-9]+(?:\.[0-9]+){2,})"
     r"|(?P<number>(?:[1-9][0-9]{0,2}(?P<group>[,'\u00a0])[0-9]{3}(?:(?P=group)[0-9]{3})*(?![0-9])|[0-9]+)"
     r"(?:[.\u00b7][0-9]+|,(?:[0-9]{1,2}(?![0-9])|(?<=\b0,)[0-9]+))?|[.\u00b7][0-9]+)"
-    r"|(?P<word>[^\W\d_][^\W_]*(?:'[^\W_]+|-[^\W\d_][^\W_]*|-[0-9]+(?![0-9.\u00b7,]))*\.?)"
+    r"|(?P<word>[^\W\d_][^\W_]*(?:'[^\W_]+|-[^\W\d_][^\W_]*|-[0-9]+(?![0-9.\u00b7,]))*(?:(?<=s)'(?=\s)|\.)?)"
     r"|(?P<break>\n\s*|\t)"
     r"|(?P<mark>[^\s])"
 )

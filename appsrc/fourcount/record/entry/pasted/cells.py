@@ -7,10 +7,12 @@ from collections.abc import Sequence
 import msgspec
 
 from fourcount.record.entry.pasted.quantities import CLOSING, OPENING, Phrases, Quantity
-from fourcount.record.entry.pasted.vocabulary import time_of_people
+from fourcount.record.entry.pasted.vocabulary import PEOPLE, time_of_people
 from fourcount.record.entry.tokens import Print, Token, as_sentence, take_apart
 
+_MOST_TOKENS = 150
 _BLANKS = frozenset(("-", "--", "---", "\u00b7", "...", "..", ".", "na", "n/a", "nr", "ns", "none", "reference", "ref"))
+_EVENT_NOUNS = frozenset(("events", "event", "deaths", "falls", "infections", "outcomes", "episodes", "with", "event"))
 _NOT_A_LABEL = frozenset(("of", "out", "in", "per", "to", "n", "p", "ci", "and", "or", "percent", "the"))
 
 
@@ -54,9 +56,19 @@ def delimited_cell(text: str) -> list[Cell]:
     tokens = printed.tokens
     if not tokens or text.casefold().strip() in _BLANKS or not any(_tells(token) for token in tokens):
         return [Cell(text=text)]
-    if tokens[0].kind == "word" and tokens[0].lower not in ("n", "p") and not _value_behind_colon(tokens):
+    numbers = sum(token.kind == "number" for token in tokens)
+    named = tokens[0].kind == "word" and (tokens[0].lower not in ("n", "p") or not numbers)
+    if not numbers or (named and not _value_behind_colon(tokens)):
         return [_label(printed, 0, len(tokens))]
-    return _cells(as_sentence(printed))
+    if tokens[0].whole is not None and numbers == 1 and tokens[1:] and _counted_noun(tokens[1:]):
+        return [Cell(text=text, quantity=Quantity(first=0, after=1, events=tokens[0]))]
+    joined = _cells(as_sentence(printed))
+    return joined if sum(cell.count is not None for cell in joined) < 2 else _cells(printed)
+
+
+def _counted_noun(tokens: Sequence[Token]) -> bool:
+    """Whether only words such as "events" or "patients" stand behind a number."""
+    return all(token.lower in PEOPLE | _EVENT_NOUNS for token in tokens)
 
 
 def _tells(token: Token) -> bool:
@@ -74,10 +86,12 @@ def row_cells(text: str) -> list[Cell]:
 
 
 def _cells(printed: Print) -> list[Cell]:
+    printed = Print(printed.shown, printed.tokens[:_MOST_TOKENS])
     tokens = printed.tokens
-    start = _body(tokens)
-    found = _labels(printed, start) if start else []
     phrases = Phrases(tokens, bare=True)
+    whole = phrases.quantity_at(0) if tokens else None
+    start = 0 if whole and whole.complete else _body(tokens)
+    found = _labels(printed, start) if start else []
     place = start
     while place < len(tokens):
         cell, after = _cell_at(printed, phrases, place)
@@ -132,9 +146,13 @@ def _labels(printed: Print, after: int) -> list[Cell]:
 def _label(printed: Print, start: int, after: int) -> Cell:
     text = printed.piece(start, after)
     tokens = printed.tokens[start:after]
-    total = _total(tokens)
+    total = _total(tokens) or _people_in_brackets(tokens)
     if total:
-        marks = [token.start for token in tokens if token.lower == "n" and token.end <= total.start]
+        marks = [
+            token.start
+            for token in tokens
+            if (token.lower == "n" or token.text in OPENING) and token.end <= total.start
+        ]
         text = printed.shown[tokens[0].start : marks[-1]] if marks else text
     return Cell(text=text, label=" ".join(text.strip(" :=,;([|*\u2020\u00a0\n").split()), total=total)
 
@@ -147,6 +165,15 @@ def _total(tokens: Sequence[Token]) -> Token | None:
             return number if number.whole else None
         if tokens[place].lower == "n" and tokens[place + 1].whole:
             return tokens[place + 1]
+    return None
+
+
+def _people_in_brackets(tokens: Sequence[Token]) -> Token | None:
+    """The number in "(412 residents)"."""
+    for place in range(1, len(tokens) - 1):
+        opened = tokens[place - 1].text in OPENING and tokens[place].whole is not None
+        if opened and tokens[place + 1].lower in PEOPLE:
+            return tokens[place]
     return None
 
 

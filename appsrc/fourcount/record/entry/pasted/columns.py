@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import re
 from collections.abc import Sequence
 
 import msgspec
@@ -10,11 +9,9 @@ import msgspec
 from fourcount.record.entry.pasted.cells import Cell
 from fourcount.record.entry.pasted.headings import Role, role_of
 from fourcount.record.entry.pasted.matrix import Head, Matrix
-from fourcount.record.entry.pasted.quantities import Quantity, gives
+from fourcount.record.entry.pasted.quantities import Quantity, gives, nearly_gives
+from fourcount.record.entry.pasted.result_text import named_result
 from fourcount.record.entry.tokens import Token
-
-_INTERVAL = re.compile(r"[(\[,; ]*([0-9.]+ ?% ?-?(?:CI|CrI|confidence interval)s?)[)\] ]*", re.IGNORECASE)
-_BRACKET = re.compile(r"[(\[]")
 
 
 def without_results(matrix: Matrix) -> Matrix:
@@ -51,20 +48,8 @@ def _texts(matrix: Matrix, columns: Sequence[int]) -> list[str]:
         cells = [row[column] for row in matrix.rows if row[column].filled]
         if role == "rate" or not cells:
             continue
-        found.append(_named(head, role, cells[0]))
+        found.append(named_result(head, role, cells[0]))
     return found
-
-
-def _named(head: str, role: Role, cell: Cell) -> str:
-    text = cell.result or cell.text
-    if role == "p" or text.startswith("P "):
-        number = text.removeprefix("P ").removeprefix("p ").strip()
-        return f"P {number}" if number[:1] in "<>=" else (number if number[:1] in "pP" else f"P = {number}")
-    interval = _INTERVAL.search(head)
-    name = _INTERVAL.sub(" ", head).strip(" ,;:")
-    if interval:
-        text = _BRACKET.sub(lambda match: f"{match[0]}{interval[1]} ", text, count=1)
-    return f"{name} {text}".strip()
 
 
 def with_percentages(matrix: Matrix) -> Matrix:
@@ -136,7 +121,8 @@ def _fits(rows: Sequence[Sequence[Cell]], percents: Sequence[Token | None], part
             continue
         if events is None or total is None or events.whole is None or total.whole is None:
             return False
-        of_total = events.whole <= total.whole and gives(percent, events.whole, total.whole)
-        if not (of_total or gives(percent, events.whole, events.whole + total.whole)):
+        if not (
+            nearly_gives(percent, events.whole, total.whole) or gives(percent, events.whole, events.whole + total.whole)
+        ):
             return False
     return True

@@ -19,6 +19,7 @@ from fourcount.record.entry.tokens import Print
 
 _MOST_WORDS = 10
 _SAY_IT = frozenset(("healed", "resolved", "recurred", "failed", "persisted", "returned"))
+_CHANGED = frozenset(("fell", "dropped", "improved"))
 _NO_EVENT = frozenset(("was", "were", "is", "are", "been", "had", "has", "have", "received", "of", "did"))
 
 
@@ -52,7 +53,7 @@ def _before(printed: Print, start: int, end: int) -> str:
     start = _past_opening(printed, start, end)
     for place in range(start, end):
         token = tokens[place]
-        if token.text == ":" or token.lower in HAPPENED or (token.lower in BE and place > start):
+        if token.text == ":" or token.lower in HAPPENED | _CHANGED or (token.lower in BE and place > start):
             subject = _subject(printed, start, place)
             if subject:
                 verb = next((each.text for each in tokens[place : min(place + 3, end)] if each.lower in _SAY_IT), "")
@@ -116,7 +117,7 @@ def _behind(printed: Print, start: int, end: int) -> str:
         token = tokens[place]
         if token.text in (".", ";"):
             return ""
-        if token.lower in VERBS and token.lower not in _NO_EVENT or (token.lower == "had" and place + 1 < end):
+        if (token.lower in VERBS and token.lower not in _NO_EVENT) or (token.lower == "had" and place + 1 < end):
             after = place + 1
             while after < end and after - place < _MOST_WORDS and tokens[after].kind == "word":
                 if (

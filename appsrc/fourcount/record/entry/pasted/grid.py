@@ -15,6 +15,8 @@ MOST_COLUMNS = 24
 _RULE = re.compile(r"[\s|+:=_-]*")
 _GAP = re.compile(r"[ \u00a0]{2,}| \| ?")
 _PAIR = re.compile(r"[0-9]{1,3},[0-9]{3}")
+_BARE = re.compile(r"[0-9]{1,3}(?:,[0-9]{3})+")
+_DECIMAL_COMMA = re.compile(r"[0-9],[0-9]+ ?%")
 _COMMA_IN_NUMBER = re.compile(r"[0-9],[0-9]{3}(?![0-9])")
 
 
@@ -55,14 +57,14 @@ def _splitter(lines: Sequence[str]) -> tuple[Callable[[str], list[str]], bool]:
     if all(_PAIR.fullmatch(line.strip()) for line in lines) and len(lines) == 2:
         return (lambda line: line.strip().split(",")), True
     if _comma_parts(lines):
-        return (lambda line: _split_outside(line, ",")), any(_COMMA_IN_NUMBER.search(line) for line in lines)
+        return (lambda line: _split_outside(line, ",")), any(_BARE.fullmatch(line.strip()) for line in lines)
     return (lambda line: [line]), False
 
 
 def _comma_parts(lines: Sequence[str]) -> bool:
     """Whether commas part every line into equally many cells, at least two of them."""
     numbers = {len(_split_outside(line, ",")) for line in lines}
-    if len(numbers) != 1 or min(numbers) < 2:
+    if len(numbers) != 1 or min(numbers) < 2 or any(_DECIMAL_COMMA.search(line) for line in lines):
         return False
     return all(len(_COMMA_IN_NUMBER.findall(line)) < line.count(",") or line.count(",") > 2 for line in lines)
 

@@ -2,13 +2,13 @@
 
 from __future__ import annotations
 
-from collections.abc import Sequence
+from collections.abc import Callable, Sequence
 
 import msgspec
 
 from fourcount.record.entry.pasted.headings import Role, heading_words, is_sum, role_of
 from fourcount.record.entry.pasted.matrix import Head, Matrix
-from fourcount.record.entry.pasted.quantities import Quantity, gives
+from fourcount.record.entry.pasted.quantities import Quantity, gives, nearly_gives
 from fourcount.record.entry.tokens import Token
 from fourcount.record.outcome import Form
 
@@ -39,16 +39,35 @@ def two_groups(matrix: Matrix) -> Understood | None:
     score += 3 * any(role in _MEASURES for role in roles) - 3 * any(role in _MEASURES for role in labels)
     score += 3 * all(label.total for label in matrix.labels) + any(label.label for label in matrix.labels)
     score -= 3 * any(head.total for head in matrix.heads)
+    sampled = _by_case(matrix.heads)
+    score += 6 * sampled - 6 * _by_case(matrix.labels) + 2 * _corner(matrix.corner)
     found = _complete(matrix) or _counted(matrix, roles) or _percentages(matrix, roles)
     if found is None:
         return None
     pair = found.quantities
     checked = [each for each in pair if each.percent and each.events and (each.total or found.others)]
-    agreeing = sum(agrees(each, found) for each in checked)
+    agreeing = len(checked) if sampled else sum(agrees(each, found) for each in checked)
     doubts = found.doubts + (("percent-disagrees",) if agreeing < len(checked) else ())
     score += found.score + agreeing - 2 * (len(checked) - agreeing)
+    if sampled:
+        pair = (msgspec.structs.replace(pair[0], percent=None), msgspec.structs.replace(pair[1], percent=None))
+        found = msgspec.structs.replace(found, quantities=pair)
     names = (matrix.labels[0].label, matrix.labels[1].label)
     return msgspec.structs.replace(found, labels=names, doubts=doubts, score=score)
+
+
+def _by_case(heads: Sequence[Head]) -> bool:
+    """Whether cases stand beside controls: outcomes by which people were chosen, not groups."""
+    said = [set(heading_words(head.label)) for head in heads]
+    return any("cases" in each for each in said) and any("controls" in each for each in said)
+
+
+def _corner(corner: str) -> int:
+    """1 where the corner says that rows are groups, -1 where it says that they are outcomes."""
+    said = set(heading_words(corner))
+    groups = said & {"arm", "group", "groups", "treatment", "exposure", "intervention", "drug", "strategy", "ward"}
+    outcomes = said & {"outcome", "outcomes", "characteristic", "event", "events", "variable", "endpoint", "end-point"}
+    return 1 if groups else -1 if outcomes else 0
 
 
 def _roles(heads: Sequence[Head]) -> list[Role]:
@@ -261,25 +280,28 @@ def _by_order(matrix: Matrix, columns: Sequence[int]) -> Understood | None:
                 return _two_outcomes(matrix, first, second, score=3, doubts=("total-left-out",))
         return None
     events, second = columns
+    together = _percent_fits(matrix, events, second, gives, together=True)
     for first, other in ((events, second), (second, events)):
-        of_total = _percent_fits(matrix, first, other, together=False)
-        if of_total and (pair := _with_totals(matrix, first, _tokens(matrix, other))):
+        fits = any(_percent_fits(matrix, first, other, judge, together=False) for judge in (gives, nearly_gives))
+        if fits and not together and (pair := _with_totals(matrix, first, _tokens(matrix, other))):
             heading = matrix.heads[first].label
             return Understood(form="events-of-total", quantities=pair, labels=("", ""), left_heading=heading, score=3)
     told = all(matrix.heads[place].label for place in columns)
     surely = told or any(_count(matrix, row, events) > _count(matrix, row, second) for row in (0, 1))
-    surely = surely or _percent_fits(matrix, events, second, together=True)
+    surely = surely or together or _percent_fits(matrix, events, second, nearly_gives, together=True)
     return _two_outcomes(matrix, events, second, score=1, doubts=() if surely else ("others-or-totals",))
 
 
-def _percent_fits(matrix: Matrix, events: int, other: int, *, together: bool) -> bool:
+def _percent_fits(
+    matrix: Matrix, events: int, other: int, judge: Callable[[Token, int, int], bool], *, together: bool
+) -> bool:
     """Whether the percentages beside one column are what it gives of the other, or of both together."""
     for row in range(2):
         quantity = matrix.rows[row][events].quantity
         if quantity is None or quantity.percent is None:
             return False
         part, whole = _count(matrix, row, events), _count(matrix, row, other)
-        if not gives(quantity.percent, part, part + whole if together else whole):
+        if not judge(quantity.percent, part, part + whole if together else whole):
             return False
         if part > whole and not together:
             return False

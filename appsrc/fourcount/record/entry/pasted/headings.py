@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import re
+from collections.abc import Callable
 from typing import Literal
 
 from fourcount.record.entry.pasted.vocabulary import PEOPLE, time_of_people
@@ -13,15 +14,19 @@ Role = Literal["events", "total", "others", "percent", "time", "rate", "result",
 _WORD = re.compile(r"[^\W_]+(?:['-][^\W_]+)*|[%+\u2713]|(?<!\w)-(?!\w)")
 _TOTAL = frozenset(
     words(
-        "total totals n number all randomised randomized denominator size sample enrolled overall analysed analyzed treated assigned allocated tested"
+        "total totals n number all randomised randomized denominator size sample enrolled overall analysed analyzed "
+        "treated assigned allocated tested"
     )
 )
 _OTHERS = frozenset(
     words(
-        "no not non without survived survivors survivor alive negative absent absence unaffected event-free well none nonevents non-events non-event never - failure-free remaining others living uninfected stable"
+        "no not non without survived survivors survivor alive negative absent absence unaffected event-free well none "
+        "nonevents non-events non-event never - failure-free remaining others living uninfected stable healthy"
     )
 )
-_EVENTS = frozenset(words("events event yes with cases died deaths dead positive present affected + responders"))
+_EVENTS = frozenset(
+    words("events event yes with cases died deaths dead positive present affected responders diseased ill sick +")
+)
 _PERCENT = frozenset(words("% percent percentage risk proportion share prevalence"))
 _RESULT = frozenset(
     words("rr or hr irr rd ratio difference ci effect relative estimate confidence odds hazard arr nnt aor ahr arr")
@@ -37,38 +42,65 @@ _NEGATIVE = frozenset(words("no negative - absent unexposed neg not non-exposed 
 def role_of(text: str) -> Role:
     """The role that a heading tells, "unknown" where it is a name of something."""
     found = heading_words(text)
-    if not found:
-        return "unknown"
     said = set(found)
-    if said & _EXPOSURES:
+    if not said or said & _EXPOSURES:
         return "unknown"
-    if "p" in said and said <= {"p", "value", "values", "for"} or "p-value" in said:
-        return "p"
-    if any(time_of_people(one, two) for one, two in zip(found, [*found[1:], ""], strict=True)):
-        return "rate" if {"per", "rate"} & said else "time"
+    for role, holds in _RULES:
+        if holds(found, said):
+            return role
+    return "unknown"
+
+
+def _is_p(_: list[str], said: set[str]) -> bool:
+    return ("p" in said and said <= {"p", "value", "values", "for"}) or "p-value" in said
+
+
+def _is_rate_of_time(found: list[str], said: set[str]) -> bool:
+    return _has_time(found, said) and bool({"per", "rate"} & said)
+
+
+def _has_time(found: list[str], said: set[str]) -> bool:
     if {"follow-up", "time"} & said and {"years", "months", "days"} & said:
-        return "time"
-    if (
-        _RESULT & said
-        and not (said & {"without", "not"})
-        and (len(said & _RESULT) > 1 or found[0] in _RESULT or "ratio" in said)
-    ):
-        return "result" if text.strip() != "or" else "unknown"
-    if "rate" in said or "per" in said:
-        return "rate"
-    if "%" in said:
-        return "events" if said & {"n", "no", "number", "events"} else "percent"
-    if {"n", "no", "number"} & said and {"with", "events", "affected", "event", "died"} & said:
-        return "events"
-    if said <= {"n", "no", "number"} | {"of"} | PEOPLE or (
-        found[0] in _TOTAL and len(found) <= 3 and not said & _EVENTS
-    ):
-        return "total" if not said == {"no"} else "others"
-    if _OTHERS & said:
-        return "others"
-    if _PERCENT & said:
-        return "percent"
-    return "events" if _EVENTS & said else "unknown"
+        return True
+    return any(time_of_people(one, two) for one, two in zip(found, [*found[1:], ""], strict=True))
+
+
+def _is_result(found: list[str], said: set[str]) -> bool:
+    if not _RESULT & said or said & {"without", "not"}:
+        return False
+    return len(said & _RESULT) > 1 or found[0] in _RESULT or "ratio" in said
+
+
+def _is_rate(_: list[str], said: set[str]) -> bool:
+    return "rate" in said or "per" in said
+
+
+def _is_counted_percent(_: list[str], said: set[str]) -> bool:
+    counts = {"n", "no", "number", "events"} & said
+    return bool(counts) and bool({"%", "with", "events", "affected", "event", "died"} & said)
+
+
+def _is_total(found: list[str], said: set[str]) -> bool:
+    if said == {"no"}:
+        return False
+    people = said <= {"n", "no", "number", "of"} | PEOPLE
+    return people or (found[0] in _TOTAL and len(found) <= 3 and not said & _EVENTS)
+
+
+_RULES: tuple[tuple[Role, Callable[[list[str], set[str]], bool]], ...] = (
+    ("p", _is_p),
+    ("rate", _is_rate_of_time),
+    ("time", _has_time),
+    ("result", _is_result),
+    ("rate", _is_rate),
+    ("events", _is_counted_percent),
+    ("percent", lambda _, said: "%" in said),
+    ("total", _is_total),
+    ("others", lambda _, said: bool(_OTHERS & said)),
+    ("percent", lambda _, said: bool(_PERCENT & said)),
+    ("events", lambda _, said: bool(_EVENTS & said)),
+)
+"""What a heading has to hold for each role; the first rule that holds decides."""
 
 
 def heading_words(text: str) -> list[str]:
@@ -87,12 +119,3 @@ def sign_of(text: str) -> int:
     """1 for "yes" and "exposed", -1 for "no" and "not exposed", 0 for anything else."""
     said = set(heading_words(text))
     return -1 if said & _NEGATIVE else int(bool(said & _POSITIVE))
-
-
-def stem_of(text: str) -> str:
-    """A heading without what makes it a yes or a no, to see whether two headings are of one thing."""
-    return " ".join(
-        word.removeprefix("un").removeprefix("non-")
-        for word in heading_words(text)
-        if word not in _POSITIVE | _NEGATIVE - {"unexposed"}
-    )

@@ -20,7 +20,7 @@ from fourcount.record.entry.tokens import Print, Token
 _MOST_WORDS = 9
 _WITH = ("with", "without")
 _JOINING = frozenset(("-", "/", "+", "&"))
-_ALWAYS_STOP = COMPARATORS | VERBS | {"respectively", "who", "which", "that", "p", "n"}
+_ALWAYS_STOP = COMPARATORS | VERBS | {"respectively", "who", "which", "that", "p", "n", "as"}
 _BEFORE_LABELS = ARTICLES | {"their", "his", "her", "those"}
 _SPANS = frozenset(("at", "within", "by", "over", "during", "after", "until", "through"))
 
@@ -47,8 +47,14 @@ class Labels:
             pair = self._both_behind(second.after, end) or self._both_ahead(start, first.first)
             if pair:
                 return self._told_apart(*pair)
+        if not any(after):
+            compared = self._of_subjects(start, first.first) or self._behind_totals(first, second, end)
+            if compared:
+                return compared
         if not (after[1] or before[1]):
             return after[0], ""
+        if not (after[0] or before[0]) and self.tokens[start].lower in PEOPLE:
+            return self._told_apart(self.behind(start, first.first), after[1] or before[1])
         return self._told_apart(after[0] or before[0], after[1] or before[1])
 
     def _behind_leading_total(self, quantity: Quantity, start: int) -> str:
@@ -58,6 +64,34 @@ class Labels:
             return ""
         place = next((place for place in range(start, quantity.first) if self.tokens[place] is total), quantity.first)
         return self.behind(place + 1, quantity.first)
+
+    def _of_subjects(self, start: int, end: int) -> tuple[str, str] | None:
+        """Both labels in "patients in group A had a lower rate than patients in group B (16/500 v 29/499)"."""
+        than = next(
+            (place for place in range(start, end) if self.tokens[place].lower in ("than", "versus", "vs")), None
+        )
+        if than is None:
+            return None
+        bracket = next((place for place in range(than, end) if self.tokens[place].text in OPENING), end)
+        verbs = [place for place in range(start, than) if self.tokens[place].lower in VERBS]
+        pair = self._subject(start, verbs[0] if verbs else than), self._subject(than + 1, bracket)
+        return pair if all(pair) else None
+
+    def _subject(self, start: int, end: int) -> str:
+        words = self.tokens[start:end]
+        plain = 0 < len(words) <= _MOST_WORDS and all(word.kind == "word" for word in words)
+        return self.behind(start, end) or (self._trimmed(start, end, None) if plain else "")
+
+    def _behind_totals(self, first: Quantity, second: Quantity, end: int) -> tuple[str, str] | None:
+        """Both labels in "we randomised 412 residents to night lights and 409 to usual care"."""
+        places = {token.start: place for place, token in enumerate(self.tokens)}
+        if first.total is None or second.total is None:
+            return None
+        one, two = places.get(first.total.start), places.get(second.total.start)
+        if one is None or two is None or not one < two or first.first < one < first.after:
+            return None
+        pair = self.behind(one + 1, two), self.behind(two + 1, first.first if two < first.first else end)
+        return pair if all(pair) else None
 
     def _told_apart(self, first: str, second: str) -> tuple[str, str]:
         """Labels without the same "with" before both; "without" stays, and then so does its "with"."""
@@ -69,9 +103,10 @@ class Labels:
 
     def behind(self, place: int, end: int) -> str:
         """The label in "... patients (9.2%) assigned to the night-light group"."""
+        bracketed = self._in_brackets(place, end)
         place = self._past_people(place, end)
-        if place >= end:
-            return ""
+        if bracketed or place >= end:
+            return bracketed
         token = self.tokens[place]
         if token.text == ":" or token.lower not in INTRODUCERS:
             return self._apposition(place, end)
@@ -84,6 +119,17 @@ class Labels:
                 kept = None if kept is None or self.tokens[kept].lower not in ("not",) else kept
             place += 1
         return self._collected(place, end, kept)
+
+    def _in_brackets(self, place: int, end: int) -> str:
+        """The label in "18% of 220 (new lens)"."""
+        while place < end and self.tokens[place].lower in PEOPLE:
+            place += 1
+        if place >= end or self.tokens[place].text not in OPENING:
+            return ""
+        after = self._past_bracket(place, end) - 1
+        inside = self.tokens[place + 1 : after]
+        plain = 0 < len(inside) <= 5 and all(token.kind == "word" for token in inside)
+        return self._trimmed(place + 1, after, None) if plain else ""
 
     def _leads(self, place: int, end: int) -> bool:
         """Whether a word only leads to the label, as in "in the group that was assigned to"."""
@@ -101,15 +147,18 @@ class Labels:
             token = self.tokens[place]
             if token.text in OPENING:
                 place = self._past_bracket(place, end)
-            elif token.text in CLOSING or token.percent or token.lower in PEOPLE or token.lower in LINKING - {"and"}:
-                place += 1
-            elif token.text == "," and self._introduces(place + 1, end):
-                place += 1
-            elif token.kind == "word" and self._introduces(place + 1, end) and token.lower not in _STOPS_HERE:
+            elif self._passes(token) or (self._introduces(place + 1, end) and self._may_introduce(token)):
                 place += 1
             else:
                 break
         return place
+
+    def _passes(self, token: Token) -> bool:
+        return token.text in CLOSING or token.percent or token.lower in PEOPLE or token.lower in LINKING
+
+    def _may_introduce(self, token: Token) -> bool:
+        """Whether a word or a comma may stand before "in the group"."""
+        return token.text == "," or (token.kind == "word" and token.lower not in _STOPS_HERE)
 
     def _introduces(self, place: int, end: int) -> bool:
         return place < end and self.tokens[place].lower in INTRODUCERS
@@ -195,8 +244,8 @@ class Labels:
         token = self.tokens[place]
         if token.kind == "mark":
             return token.text in _JOINING
-        if token.kind == "number":
-            return False
+        if token.kind == "number" or token.lower == "who":
+            return token.kind == "word"
         stops = token.lower in COMPARATORS or token.lower in VERBS or token.lower in INTRODUCERS
         return not (stops or token.lower in ("and", "of", "to", "by", "or", "but"))
 
@@ -244,8 +293,7 @@ def sentence_bounds(tokens: Sequence[Token]) -> list[int]:
     for place, token in enumerate(tokens[:-1]):
         following = tokens[place + 1]
         stop = token.text == "." or (token.kind == "word" and token.text.endswith(".") and len(token.text) > 3)
-        if stop and token.lower not in ("vs", "v", "approx", "no") and following.text[:1].isupper():
-            ends.append(place + 1)
-        elif stop and following.kind == "number" and following.lower and token.text != "vs.":
+        begins = following.text[:1].isupper() or (following.kind == "number" and following.lower != "")
+        if stop and begins and token.lower not in ("vs", "v", "approx", "no"):
             ends.append(place + 1)
     return [*ends, len(tokens)]

@@ -10,7 +10,8 @@ import msgspec
 
 from fourcount.record.entry.pasted.cells import Cell
 from fourcount.record.entry.pasted.grid import Grid
-from fourcount.record.entry.pasted.headings import is_sum
+from fourcount.record.entry.pasted.headings import is_sum, role_of
+from fourcount.record.entry.pasted.result_text import named_result
 from fourcount.record.entry.tokens import Token
 
 EMPTY = Cell()
@@ -80,7 +81,11 @@ def _without_result_lines(rows: Sequence[Sequence[Cell]]) -> tuple[tuple[str, ..
     for row in rows:
         filled = [cell for cell in row if cell.filled]
         if filled and all(cell.result for cell in filled):
-            texts.append(" ".join(cell.text if not cell.result else cell.result for cell in row if not cell.empty))
+            label = " ".join(cell.label for cell in row if cell.label)
+            pieces = [
+                named_result(label if not place else "", role_of(label), cell) for place, cell in enumerate(filled)
+            ]
+            texts.append(", ".join(pieces))
         else:
             kept.append(row)
     return (tuple(texts), kept) if kept else ((), list(rows))
@@ -148,8 +153,10 @@ def _aligned(row: Sequence[Cell], lead: int, width: int) -> list[Cell] | None:
         cells = cells[lead:]
     elif len(cells) > width:
         cells = cells[len(cells) - width :]
-    elif len(cells) > 1 and lead and cells[0].empty and width % (len(cells) - 1) == 0:
-        cells = cells[1:]
+    elif len(cells) > 1 and lead and cells[0].empty:
+        cells = cells[lead:]
+        if width % len(cells):
+            cells += [EMPTY] * (width - len(cells))
     told = [cell for cell in cells if not cell.empty]
     if len(cells) < width or (len(told) < width and told and cells[0] is told[0]):
         spread = len(told) and width % len(told) == 0

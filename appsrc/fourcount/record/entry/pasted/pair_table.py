@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+import re
+
 from fourcount.record.entry.pasted.headings import heading_words, sign_of
 from fourcount.record.entry.pasted.matrix import Matrix
 from fourcount.record.entry.readings import Pasted, PastedGroup
@@ -28,9 +30,8 @@ def pair_table(matrix: Matrix, text: str) -> Pasted | None:
         [sorted(heading_words(label)) for label in across],
         [sorted(heading_words(label)) for label in across[::-1]],
     )
-    twice = any(
-        one in _all(down) and two in _all(across) or two in _all(down) and one in _all(across) for one, two in _TWICE
-    )
+    twice = any({one, two} <= _all(down) | _all(across) and not {one, two} <= _all(down) for one, two in _TWICE)
+    same = same or bool(_all(down) and {word for word in _all(down) if len(word) > 1} & _all(across))
     if not (same or twice or _SAYS_PAIRS & said):
         return None
     rows = matrix.rows if sign_of(down[0]) == 1 else matrix.rows[::-1]
@@ -52,4 +53,4 @@ def _all(labels: list[str]) -> set[str]:
 def _side(labels: list[str]) -> str:
     """What both labels of one side share ("before" in "Yes before", "No before")."""
     shared = _all(labels)
-    return " ".join(word for word in labels[0].split() if word.casefold() in shared)
+    return " ".join(word for word in re.findall(r"[\w'-]+", labels[0]) if word.casefold() in shared)

@@ -77,14 +77,25 @@ class Phrases:
             return False
         if before.text in ("/", "-") and before.end == token.start and self.at(place - 2).end == before.start:
             return self.at(place - 2).kind == "word" and before.text == "-"
+        if ":" in (before.text, following.text) and self._is_clock(place):
+            return False
         joined = following.text == "-" and following.start == token.end and self.at(place + 2).start == following.end
         return not (joined and not token.percent)
+
+    def _is_clock(self, place: int) -> bool:
+        """Whether a number is part of a time or a ratio such as 9:30."""
+        for colon in (place - 1, place + 1):
+            left, right = self.at(colon - 1), self.at(colon + 1)
+            both = left.kind == right.kind == "number" and self.at(colon).text == ":"
+            if both and left.end == self.at(colon).start and right.start == self.at(colon).end:
+                return True
+        return False
 
     def _of_total(self, place: int) -> Quantity | None:
         """``38/412``, ``38 of 412``, ``38 (9.2%) of the 412 patients``, with a percentage behind it or within."""
         events = self.at(place)
         link = place + 1
-        percent, link = self._percent(link, events, None)
+        percent, link = self._percent(self._nouns(link, 3), events, None, back=link)
         if self.at(link).text == "/" and percent is None:
             total_place = link + 1
             if self.at(total_place + 1).text == "/" or self.at(place - 1).text == "/":
@@ -260,6 +271,9 @@ class Phrases:
         )
         if not (said or unsaid):
             return None, back
+        if following.text in (";", ","):
+            close = next((step for step in range(after, after + 12) if self.at(step).text in CLOSING), after - 1)
+            return inside, close + 1
         return inside, after + (following.text in CLOSING)
 
     def _level(self, place: int) -> bool:
@@ -284,3 +298,8 @@ def gives(percent: Token, events: int, total: int) -> bool:
     """Whether so many of so many are the printed percentage."""
     value = Fraction(percent.text.replace(",", ".").replace("\u00b7", ".").lstrip("-") or "0")
     return rounds_to(PrintedPercent(value=value, decimals=percent.decimals), events, total)
+
+
+def nearly_gives(percent: Token, events: int, total: int) -> bool:
+    """Whether so many of so many are about the printed percentage, so that it may be a slip of print."""
+    return total > 0 and events <= total and abs(100 * events / total - percent.value) <= max(1.0, 0.1 * percent.value)

@@ -7,7 +7,7 @@ from collections.abc import Sequence
 import msgspec
 
 from fourcount.record.entry.pasted.groups import Understood, two_groups
-from fourcount.record.entry.pasted.headings import heading_words, is_sum, role_of
+from fourcount.record.entry.pasted.headings import is_sum, role_of
 from fourcount.record.entry.pasted.matrix import Head, Matrix
 from fourcount.record.entry.pasted.quantities import Quantity
 from fourcount.record.entry.tokens import Token
@@ -49,7 +49,8 @@ def _wide(matrix: Matrix) -> Strata | None:
     rows = [row for row in range(len(matrix.rows)) if not is_sum(matrix.labels[row].label)] or [0]
     if any(cell.count is None for row in rows for cell in matrix.rows[row]):
         return None
-    roles = [role_of(head.label) for head in matrix.heads]
+    groups = (_shared(matrix.heads[0], matrix.heads[1]), _shared(matrix.heads[2], matrix.heads[3]))
+    roles = [role_of(_without(head.label, groups[place // 2])) for place, head in enumerate(matrix.heads)]
     timed = roles[1] == roles[3] == "time" or any(
         cell.quantity and cell.quantity.unit for row in rows for cell in matrix.rows[row][1::2]
     )
@@ -59,7 +60,6 @@ def _wide(matrix: Matrix) -> Strata | None:
         _whole(matrix, row, place) > _whole(matrix, row, place + 1) for row in rows for place in (0, 2)
     )
     doubts = set() if roles[1] == roles[3] and roles[1] in ("total", "others", "time") else {"others-or-totals"}
-    groups = (_shared(matrix.heads[0], matrix.heads[1]), _shared(matrix.heads[2], matrix.heads[3]))
     tables = [_table(matrix, row, groups, "time" if timed else "others" if others else "total") for row in rows]
     if len(rows) < len(matrix.rows):
         doubts.add("total-left-out")
@@ -73,8 +73,13 @@ def _whole(matrix: Matrix, row: int, column: int) -> int:
 
 def _shared(one: Head, other: Head) -> str:
     """The words that the headings of one group's two columns share: its label."""
-    shared = set(heading_words(one.label)) & set(heading_words(other.label))
-    return " ".join(word for word in one.label.split() if word.casefold() in shared)
+    shared = set(one.label.split()) & set(other.label.split())
+    return " ".join(word for word in one.label.split() if word in shared)
+
+
+def _without(text: str, label: str) -> str:
+    """A heading without its group's label."""
+    return " ".join(word for word in text.split() if word not in label.split())
 
 
 def _table(matrix: Matrix, row: int, groups: tuple[str, str], second: str) -> Understood:
@@ -89,7 +94,7 @@ def _table(matrix: Matrix, row: int, groups: tuple[str, str], second: str) -> Un
     others: tuple[Token, ...] = tuple(token for token in apart if token) if second == "others" else ()
     unit = next((cell.quantity.unit for cell in cells if cell.quantity and cell.quantity.unit), "")
     if second == "time" and not unit:
-        unit = " ".join(word for word in matrix.heads[1].label.split() if word not in groups[0].split()).lower()
+        unit = _without(matrix.heads[1].label, groups[0]).lower()
     return Understood(
         form={"total": "events-of-total", "time": "person-time"}.get(second, "events-and-others"),  # type: ignore[arg-type]
         quantities=(pair[0], pair[1]),

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Iterator, Sequence
+from itertools import pairwise
 
 import msgspec
 
@@ -10,7 +11,8 @@ from fourcount.record.entry.pasted.quantities import Quantity, gives
 from fourcount.record.entry.pasted.vocabulary import NOT_COUNTED, PEOPLE, TIME_UNITS
 from fourcount.record.entry.tokens import Token
 
-_LEADS = frozenset(("of", "among", "the", "in", "assigned", "allocated", "randomised", "randomized", "and", "received"))
+_MOST = 12
+_LEADS = frozenset(("of", "among", "the", "assigned", "allocated", "randomised", "randomized", "and", "received"))
 
 
 class Candidate(msgspec.Struct, frozen=True):
@@ -61,6 +63,8 @@ def _candidates(tokens: Sequence[Token], taken: frozenset[int], quantities: Sequ
         if before.lower in NOT_COUNTED or before.text in ("/", "-", "<", ">") or before.lower == "aged":
             continue
         named = before.text == "=" or before.lower == "n"
+        if 1900 <= token.whole < 2100 and len(token.text) == 4 and not (named or PEOPLE.intersection(behind)):
+            continue
         said = named or bool(PEOPLE.intersection(behind)) or before.lower in _LEADS
         found.append(Candidate(place, token, said, named))
     return found
@@ -70,10 +74,10 @@ def _ways(
     found: Sequence[Candidate], first: Quantity, second: Quantity, end: int
 ) -> Iterator[tuple[tuple[Candidate | None, Candidate | None], bool]]:
     """Pairs of totals in the order in which they are believed, and whether they stand where totals usually do."""
-    before = [each for each in found if each.place < first.first]
-    between = [each for each in found if first.after <= each.place < second.first]
-    behind = [each for each in found if second.after <= each.place < end]
-    after = [each for each in found if each.place >= second.after]
+    before = [each for each in found if each.place < first.first][-_MOST:]
+    between = [each for each in found if first.after <= each.place < second.first][:_MOST]
+    behind = [each for each in found if second.after <= each.place < end][:_MOST]
+    after = [each for each in found if each.place >= second.after][:_MOST]
     own_first, own_second = first.total is not None, second.total is not None
     if own_first and own_second:
         yield (None, None), True
@@ -94,7 +98,7 @@ def _ways(
 
 
 def _neighbours(group: Sequence[Candidate], backwards: object) -> Iterator[tuple[Candidate, Candidate]]:
-    for one, two in zip(group, group[1:], strict=False):
+    for one, two in pairwise(group):
         yield (two, one) if backwards else (one, two)
 
 

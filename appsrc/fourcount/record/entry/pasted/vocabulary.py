@@ -6,12 +6,12 @@ from fourcount.record.entry.word_list import words
 
 PEOPLE = frozenset(
     words(
-        "patients patient participants participant people persons person individuals subjects subject women woman men "
-        "man children child infants babies newborns neonates adults adolescents residents volunteers mothers boys girls "
-        "cases controls pregnancies members recipients students workers nurses users smokers nonsmokers veterans "
-        "survivors births deliveries eyes knees hips limbs legs teeth procedures operations admissions patients' "
-        "enrollees attendees respondents inpatients outpatients toddlers pupils players runners households donors "
-        "carers employees teenagers elders seniors pilots drivers clients"
+        "patients patient participants participant people persons person individuals subjects subject women woman "
+        "men man children child infants babies newborns neonates adults adolescents residents volunteers mothers "
+        "boys girls cases controls pregnancies members recipients students workers nurses users smokers nonsmokers "
+        "veterans survivors births deliveries eyes knees hips limbs legs teeth procedures operations admissions "
+        "patients' enrollees attendees respondents inpatients outpatients toddlers pupils players runners "
+        "households donors carers employees teenagers elders seniors pilots drivers clients"
     )
 )
 GROUP_NOUNS = frozenset(words("group groups arm arms cohort cohorts"))
@@ -20,31 +20,32 @@ COMPARATORS = frozenset(words("versus vs v compared than against whereas while r
 JOINERS = frozenset(words("and or but with whereas while versus vs v compared than against to"))
 INTRODUCERS = frozenset(
     words(
-        "in with on receiving received receive given assigned allocated randomised randomized taking took using used "
-        "under without after before for from treated at among having who undergoing wearing exposed unexposed "
-        "offered managed not"
+        "in with on receiving received receive given assigned allocated randomised randomized taking took using "
+        "used under without after before for from treated at among having who undergoing wearing offered not"
     )
 )
 LINKING = frozenset(
     words(
-        "the a an those who were was had been being of all these patients participants people women men children adults "
-        "residents individuals subjects infants babies volunteers to receive be have group arm then that persons"
+        "the a an those who were was had been being of all these patients participants people women men children "
+        "adults residents individuals subjects infants babies volunteers to receive be have group arm then that "
+        "persons"
     )
 )
 VERBS = frozenset(
     words(
         "had have has were was died die developed reported needed experienced underwent required suffered did fell "
-        "relapsed recovered healed stopped achieved met gave lost reached responded withdrew dropped improved became "
-        "became returned survived vomited bled remained contracted attained showed discontinued failed quit delivered "
-        "sustained progressed chose completed presented complained admitted readmitted noted slept missed tripped "
-        "coughed fainted felt went"
+        "relapsed recovered healed stopped achieved met gave lost reached responded withdrew dropped improved "
+        "became became returned survived vomited bled remained contracted attained showed discontinued failed quit "
+        "delivered sustained progressed chose completed presented complained admitted readmitted noted slept "
+        "missed tripped coughed fainted felt went"
     )
 )
 HAPPENED = frozenset(
     words(
-        "occurred occurs occur developed happened seen reported recorded observed noted present diagnosed found detected "
-        "documented identified appeared arose affected healed resolved recurred failed confirmed experienced needed "
-        "required achieved reached persisted returned given performed described registered followed common"
+        "occurred occurs occur developed happened seen reported recorded observed noted present diagnosed found "
+        "detected documented identified appeared arose affected healed resolved recurred failed confirmed "
+        "experienced needed required achieved reached persisted returned given performed described registered "
+        "followed common rose decreased increased declined"
     )
 )
 BE = frozenset(words("was were is are had has been be did"))
@@ -54,26 +55,34 @@ TIME_UNITS = frozenset(
 SPAN_WORDS = frozenset(words("at by within over during after through in for"))
 DETERMINERS = frozenset(words("the all its these those their our a total"))
 
-NOT_COUNTED = frozenset(
+NOT_PEOPLE = frozenset(
     words(
-        "score scores scored scoring scale scales page pages chapter chapters table tables figure figures mmhg mm mg ml "
-        "kg questions question items item points volume issue acuity doses dose version grade stage visual vision "
-        "blood pressure systolic diastolic dollars euros pounds season seasons rating ratings rated rate-limiting "
-        "sensitivity specificity domains criteria centres centers hospitals sites countries studies trials articles "
-        "papers records reviewers lesson lessons marks stars sections section appendix supplement verse vas apgar "
-        "reads lanes step steps tablets tablet capsules cups teaspoons phase titres titre titer titers dilution "
-        "dilutions tests wells plates channels copies hours-a-day sessions visits bpm percentile percentiles "
-        "odds-on cost costs price prices budget fraction fractions weight height length scale-points levels"
+        "score scores scored scoring scale scales page pages chapter chapters table tables figure figures mmhg "
+        "volume issue acuity version grade visual vision systolic diastolic dollars euros pounds season seasons "
+        "rating ratings rated lesson lessons marks appendix supplement verse vas apgar lanes titre titer titers "
+        "titres dilution percentile domains criteria reviewers"
     )
 )
-"""Nouns beside which a number of a number is no count of people."""
+"""Words in whose neighbourhood a number of a number is no count of people."""
+
+NOT_COUNTED = NOT_PEOPLE | frozenset(
+    words(
+        "mm mg ml kg g cm l questions question item items point points dose doses centres centers hospitals sites "
+        "countries studies trials articles papers records stars sections section reads step steps tablets tablet "
+        "capsules cups teaspoons tests wells plates channels copies sessions visits bpm percentiles fraction "
+        "fractions clinics schools wards villages practices regions states samples specimens measurements chapters "
+        "guidelines"
+    )
+)
+"""Nouns that, right behind a number, say that it counts no people."""
 
 TIME_OF_PEOPLE = frozenset(words("years year months month weeks week days day hours hour"))
 _SHORT_TIMES = frozenset(words("py pys pyr pyrs p-y person-yr person-yrs patient-yr patient-yrs"))
 _WHOSE_TIME = frozenset(
     words(
         "person patient participant woman women child man people resident catheter device line ventilator bed cow "
-        "subject infant nurse user implant employee player athlete worker pump tube admission family household animal"
+        "subject infant nurse user implant employee player athlete worker pump tube admission family household "
+        "animal"
     )
 )
 

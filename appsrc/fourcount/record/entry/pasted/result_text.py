@@ -1,0 +1,23 @@
+"""A printed result put together from a table: its heading and its cell as one text."""
+
+from __future__ import annotations
+
+import re
+
+from fourcount.record.entry.pasted.cells import Cell
+from fourcount.record.entry.pasted.headings import Role
+
+_INTERVAL = re.compile(r"[(\[,; ]*([0-9.]+ ?% ?-?(?:CI|CrI|confidence interval)s?)[)\] ]*", re.IGNORECASE)
+_BRACKET = re.compile(r"[(\[]")
+
+
+def named_result(head: str, role: Role, cell: Cell) -> str:
+    text = cell.result or cell.text
+    if role == "p" or text.startswith("P "):
+        number = text.removeprefix("P ").removeprefix("p ").strip()
+        return f"P {number}" if number[:1] in "<>=" else (number if number[:1] in "pP" else f"P = {number}")
+    interval = _INTERVAL.search(head)
+    name = _INTERVAL.sub(" ", head).strip(" ,;:")
+    if interval:
+        text = _BRACKET.sub(lambda match: f"{match[0]}{interval[1]} ", text, count=1)
+    return f"{name} {text}".strip()
