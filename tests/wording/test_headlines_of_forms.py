@@ -1,0 +1,177 @@
+"""Headlines and meanings of every form: whole people or person-time where that is honest, odds as odds."""
+
+from __future__ import annotations
+
+import re
+
+import pytest
+
+from forms import CONFOUNDED, at_time, effect_only, paired, person_time, strata
+from fourcount.appraisal.appraise import appraise
+from fourcount.record.paper import Choices
+from fourcount.wording.p_value import NOT_THE_SIZE
+from fourcount.wording.sentence import headline, measure_sentence, p_sentence
+
+NOT_OF_ODDS = re.compile(r"\b(risks?|chances?|probability|probable|likely|prevalences?)\b")
+BY_HAND = "It rests on the 60 pairs that differ: in 20 the event came only {index}, in 40 only {reference}."
+
+
+def said(outcome, choices=None):
+    choices = choices or Choices()
+    return headline(outcome, appraise(outcome, choices), choices)
+
+
+def meaning(key, outcome):
+    return measure_sentence(key, outcome, appraise(outcome, Choices()), Choices())
+
+
+@pytest.mark.parametrize(
+    ("outcome", "text"),
+    [
+        (
+            paired(),
+            (
+                "Of 100 people with usual care about 35 fell at least once within 12 months; of 100 with night lights "
+                "about 25. That is 10 fewer, and could be as few as 2 or as many as 17 (95% interval)."
+            ),
+        ),
+        (
+            paired("before-after", first_label_text="After", second_label_text="Before"),
+            (
+                "Of 100 people in the period “Before” about 35 fell at least once within 12 months; of 100 in the period "
+                "“After” about 25. That is 10 fewer, and could be as few as 2 or as many as 17 (95% interval)."
+            ),
+        ),
+        (
+            paired("matched", first_label_text="Cases", second_label_text="Controls", left_words_text="smoked"),
+            "Within pairs, the odds that the person in the group “Cases” smoked within 12 months were 0.50 times those "
+            "in the group “Controls” (95% interval 0.29 to 0.85). "
+            + BY_HAND.format(index="in the group “Cases”", reference="in the group “Controls”"),
+        ),
+        (
+            person_time(design="trial"),
+            (
+                "With usual care there were 17.1 events (“fell at least once”) per 1,000 person-years; with night lights "
+                "9.2. That is 7.9 fewer, and could be as few as 3.0 or as many as 13.1 (95% interval)."
+            ),
+        ),
+        (
+            person_time((0, 4120, 3, 4090), design="trial"),
+            (
+                "With usual care there were 7.3 events (“fell at least once”) per 10,000 person-years; with night lights "
+                "none. That is 7.3 fewer, and could be anything from 21.6 fewer to 2.0 more (95% interval): compatible "
+                "with fewer and with more."
+            ),
+        ),
+        (
+            at_time(level="90%"),
+            (
+                "Of 100 people with usual care about 17 fell at least once within 12 months; of 100 with night lights "
+                "about 9. That is 8 fewer, and could be as few as 3 or as many as 13 (90% interval)."
+            ),
+        ),
+        (
+            effect_only(),
+            (
+                "The paper prints a hazard ratio: at any moment, among people still without it, the rate of the event with "
+                "night lights was 0.72 times that with usual care (95% interval 0.55 to 0.92). Without counts it cannot be "
+                "checked against them, and it compares rates from moment to moment, and is no risk ratio."
+            ),
+        ),
+        (
+            effect_only("odds_ratio", adjusted_for_text="age"),
+            (
+                "The paper prints an odds ratio, adjusted for age: the odds that a person with night lights fell at least "
+                "once within 12 months were 0.72 times those with usual care (95% interval 0.55 to 0.92). Without counts "
+                "it cannot be checked against them, and odds are not shares of people."
+            ),
+        ),
+        (
+            effect_only("risk_ratio", index_group="second"),
+            (
+                "The paper prints a risk ratio, here turned round: the risk with usual care was 1.39 times that with night "
+                "lights (95% interval 1.09 to 1.82). Without counts it cannot be checked against them, and by itself it "
+                "does not say how large the risks are."
+            ),
+        ),
+        (
+            strata(rows=CONFOUNDED, design="trial"),
+            (
+                "Within strata, per 100 people as many fell at least once within 12 months with night lights as with usual "
+                "care (95% interval 8.8 fewer to 8.8 more). Crude, without strata, it is 15.0 more per 100 (7.7 to 22.4)."
+            ),
+        ),
+    ],
+)
+def test_what_a_form_says_in_one_sentence(outcome, text):
+    """Word for word."""
+    assert said(outcome) == text
+
+
+@pytest.mark.parametrize(
+    "outcome", [paired("matched"), effect_only("odds_ratio"), strata("case-control"), paired("matched", ("", 5, 3, ""))]
+)
+def test_a_headline_about_odds_speaks_of_odds_only(outcome):
+    """Cochrane open learning, module 11-7: no risk, chance or probability in it."""
+    text = said(outcome)
+    assert "odds" in text
+    assert not NOT_OF_ODDS.search(text)
+
+
+def test_person_time_never_speaks_of_people():
+    """A rate is no share of people."""
+    assert "people" not in said(person_time())
+    for key in ("rate_index", "rate_difference"):
+        assert "not a share of people" in meaning(key, person_time())
+
+
+def test_a_rate_ratio_names_both_rates():
+    """The relative never without the absolute."""
+    assert meaning("rate_ratio", person_time(design="trial")) == (
+        "The rate of events with night lights was 0.54 times that with usual care (95% interval 0.36 to 0.80): a "
+        "relative reduction of 46%. By itself it does not say how large the rate is: it was 17.1 with usual care and "
+        "9.2 with night lights, per 1,000 person-years."
+    )
+
+
+def test_one_event_is_one_event():
+    """Not one events."""
+    assert "1 event in 10 person-years" in meaning("rate_index", person_time((1, 10, 2, 10)))
+
+
+def test_a_pooled_figure_says_what_it_supposes_and_the_crude_one():
+    """And of odds, that parting needs no confounding."""
+    text = meaning("pooled_odds_ratio", strata(rows=CONFOUNDED))
+    assert text.startswith("Within strata, the odds that a person")
+    assert "it is taken to be the same in all of them" in text
+    assert "Crude, without strata, it is 3.00" in text
+    assert "an odds ratio can do it without any confounding" in text
+
+
+@pytest.mark.parametrize(
+    ("outcome", "by"),
+    [
+        (paired(), "p = 0.0099 by the McNemar mid-P test of no difference within pairs, two-sided."),
+        (person_time(), "p = 0.0018 by the score test of equal rates, two-sided."),
+        (effect_only(), "p = 0.012, two-sided, worked out from the printed figures alone."),
+        (
+            strata(),
+            "p = 0.0010 by the Cochran–Mantel–Haenszel test of no association within the strata, two-sided.",
+        ),
+    ],
+)
+def test_the_p_names_its_test_and_what_that_tests(outcome, by):
+    """And says that it is not the size of the effect."""
+    assert p_sentence(appraise(outcome, Choices())).startswith(f"{by} {NOT_THE_SIZE}")
+
+
+def test_strata_say_whether_one_odds_ratio_may_hold():
+    """With its test, chi-square and degrees of freedom, and that a large p shows nothing."""
+    text = p_sentence(appraise(strata(), Choices()))
+    assert "p = 0.53 by the Breslow–Day test with Tarone’s correction (chi-square 0.40 on 1 degree of freedom)" in text
+    assert "a large one does not show it" in text
+
+
+def test_printed_risks_have_no_p_and_say_why():
+    """Not that four counts are missing."""
+    assert p_sentence(appraise(at_time(), Choices())).startswith("Two printed risks have no p of their own")

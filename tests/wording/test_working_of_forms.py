@@ -1,0 +1,138 @@
+"""The working of every form: the formula with the reader's numbers, its method, and the others."""
+
+from __future__ import annotations
+
+import pytest
+
+from forms import CONFOUNDED, EVERY_FORM, at_time, effect_only, of_total, paired, person_time, strata
+from fourcount.appraisal.appraise import appraise
+from fourcount.record.paper import Choices
+from fourcount.stats.methods import PAIR_TESTS, RATE_TESTS, STRATA_TESTS
+from fourcount.wording.extras import extra_lines
+from fourcount.wording.form import measure_of
+from fourcount.wording.lines import measure_lines
+from fourcount.wording.working import working
+from fourcount.wording.working.parts import methods_of, table_measure
+
+
+def rows_of(key, outcome, choices=None):
+    choices = choices or Choices()
+    return dict(working(key, outcome, appraise(outcome, choices), choices).rows)
+
+
+@pytest.mark.parametrize(
+    ("outcome", "key", "formula"),
+    [
+        (paired(), "pair_difference", "(20 − 40)/200 = −0.1000"),
+        (paired(), "number_needed", "1/0.1000 = 10.00, rounded up 10"),
+        (paired(), "pair_risk_index", "(30 + 20)/200 = 50/200 = 0.2500"),
+        (paired(), "pair_risk_reference", "(30 + 40)/200 = 70/200 = 0.3500"),
+        (paired(), "pair_ratio", "(30 + 20)/(30 + 40) = 50/70 = 0.7143"),
+        (paired(), "pair_odds_ratio", "20/40 = 0.5000"),
+        (paired(counts=("", 20, 40, "")), "pair_odds_ratio", "20/40 = 0.5000"),
+        (person_time(), "rate_index", "38/4,120 = 0.0092"),
+        (person_time(), "rate_difference", "38/4,120 − 70/4,090 = 0.0092 − 0.0171 = −0.0079"),
+        (person_time(), "rate_ratio", "(38/4,120) / (70/4,090) = 0.0092 / 0.0171 = 0.5389"),
+        (at_time(), "risk_difference", "0.0920 − 0.1710 = −0.0790"),
+        (at_time(), "risk_ratio", "0.0920 / 0.1710 = 0.5380"),
+        (strata(), "pooled_risk_ratio", "19.0992/34.8923 = 0.5474"),
+        (strata(), "pooled_risk_difference", "−15.7931/205.1575 = −0.0770"),
+        (strata(), "pooled_odds_ratio", "15.4167/31.2098 = 0.4940"),
+        (strata(), "risk_ratio", "(38/412) / (70/409) = 0.0922 / 0.1711 = 0.5389"),
+    ],
+)
+def test_the_formula_holds_the_readers_numbers(outcome, key, formula):
+    """Each step can be checked with a pencil."""
+    assert rows_of(key, outcome)["Estimate"] == formula
+
+
+def test_a_stratum_shows_its_part_of_the_sums():
+    """10 of 200 against 22 of 190: 10 × 190/390 and 22 × 200/390."""
+    assert rows_of("pooled_risk_ratio", strata())["under 65"] == "a n2/N = 4.8718, c n1/N = 11.2821"
+
+
+def test_two_strata_are_set_against_each_other():
+    """Altman and Bland 2003: the ratio of their ratios with its interval and p, and nothing of the kind for three."""
+    rows = rows_of("pooled_risk_ratio", strata())
+    assert rows["Ratio of the two strata’s ratios"] == "0.72 (0.31 to 1.63), p = 0.43"
+    three = (*CONFOUNDED, ("worst", 5, 10, 6, 10))
+    assert "Ratio of the two strata’s ratios" not in rows_of("pooled_risk_ratio", strata(rows=three))
+
+
+@pytest.mark.parametrize("name", EVERY_FORM)
+def test_every_line_has_a_working_and_every_other_method_is_in_it(name):
+    """Whatever can be pressed opens, and the table of methods is told in full."""
+    outcome, choices = EVERY_FORM[name], Choices()
+    findings = appraise(outcome, choices)
+    for line in measure_lines(outcome, findings, choices):
+        found = working(line.key, outcome, findings, choices)
+        assert found.title == line.name
+        if line.withheld:
+            assert (found.sentence, found.rows) == (line.withheld, ())
+            continue
+        assert found.rows
+        figure = measure_of(line.key, findings)
+        if line.key in findings.measures and getattr(figure, "method", "printed") != "printed":
+            if line.key.startswith("odds_") or line.key == "number_needed":
+                continue  # they take the limits of another measure
+            titles = {entry.title for entry in methods_of(table_measure(line.key, findings.form))}
+            rows = dict(found.rows)
+            assert titles <= {*rows, rows["Method"]}
+
+
+@pytest.mark.parametrize(
+    ("outcome", "tests"), [(paired(), PAIR_TESTS), (person_time(), RATE_TESTS), (strata(), STRATA_TESTS)]
+)
+def test_the_p_of_every_test_of_the_form_stands_together(outcome, tests):
+    """With the family's own in full."""
+    rows = rows_of("test", outcome)
+    assert {entry.title for entry in tests} <= set(rows)
+    assert rows["Formula"]
+    assert rows["Source"]
+
+
+def test_a_printed_effect_shows_its_text_and_what_follows_from_it():
+    """Standard error, z and p by the formula of Altman and Bland."""
+    rows = rows_of("hazard_ratio", effect_only())
+    assert rows["As printed"] == "0.72 (0.55 to 0.92)"
+    assert rows["Level"] == "The print says no level; 95% is taken"
+    assert (rows["Standard error"], rows["z"], rows["p"]) == ("0.1312", "−2.50", "0.012")
+    assert "Altman and Bland 2011" in rows["Source"]
+    assert rows_of("hazard_ratio", effect_only(text="0.72; 90% CI 0.55 to 0.92"))["Level"] == "90%"
+
+
+def test_clusters_divide_the_counts_of_every_method():
+    """The others are not told as if people were independent, and an exact one says that it cannot."""
+    clustered = of_total(icc_text="0.02", cluster_size_text="21")
+    rows = rows_of("risk_difference", clustered)
+    assert rows["Of intervals and p, the counts divided by the design effect"] == "1.4000"
+    plain = rows_of("risk_difference", of_total())
+    assert (plain["Wald"], rows["Wald"]) == ("3.3 to 12.5", "2.5 to 13.3")
+    assert "not whole" in rows_of("odds_ratio", clustered)["Conditional exact (Cornfield, Fisher)"]
+
+
+def test_without_a_correlation_no_method_of_a_cluster_trial_is_told():
+    """Nor a p: all of them would be too narrow."""
+    clustered = of_total(cluster_size_text="21")
+    assert "Wald" not in rows_of("risk_difference", clustered)
+    assert not rows_of("test", clustered)
+
+
+def test_every_extra_has_a_working():
+    """Its formula, its source, the reader's numbers."""
+    outcome = of_total(first_lost_text="20", second_lost_text="10", icc_text="0.02", cluster_size_text="21")
+    choices = Choices()
+    findings = appraise(outcome, choices)
+    found = {
+        line.key: working(line.key, outcome, findings, choices) for line in extra_lines(outcome, findings, choices)
+    }
+    assert dict(found["clusters"].rows)["Design effect"] == "1 + (21 − 1) × 0.02 = 1.4000"
+    assert dict(found["losses.worst"].rows)["Lost, index group"] == "20"
+    assert "Akl" in dict(found["losses.worst"].rows)["Source"]
+
+
+def test_a_line_that_is_not_there_has_an_empty_working():
+    """A row pressed while its table changes raises nothing."""
+    findings = appraise(paired(), Choices())
+    for key in ("stratum.7", "e_value"):
+        assert working(key, paired(), findings, Choices()).rows == ()
