@@ -115,6 +115,15 @@ class Hands:
         """A measure's row on screen."""
         return next(row for row in self.window.says.findChildren(MeasureRow) if row.key == key and row.isVisible())
 
+    def top(self, widget: QWidget) -> int:
+        """How far down the first column a widget stands."""
+        return widget.mapTo(self.window.printed, widget.rect().bottomLeft()).y()
+
+    def stands_alone(self, widget: QWidget) -> bool:
+        """Whether a widget stands in the first column and not in its grid, where labels come before cells."""
+        printed = self.window.printed
+        return printed.isAncestorOf(widget) and not printed.grid.isAncestorOf(widget)
+
     @property
     def notes(self) -> list[str]:
         """The sentences about marked cells."""

@@ -7,15 +7,20 @@ from typing import Any
 import pytest
 from PySide6.QtWidgets import QWidget
 
+from fourcount.face.cell import CountCell
+from fourcount.face.fields import ChoiceField
 from fourcount.face.for_one_patient import PictureView
+from fourcount.face.links import Link
 from fourcount.face.measure_row import MeasureRow
 from fourcount.face.text import Words
 from fourcount.record import editing
-from fourcount.record.outcome import Design
+from fourcount.record.outcome import CELLS, FORMS, Design, Form
 from fourcount.wording.example import worked_example
 
 SIZES = ((1280, 800), (1024, 700), (700, 600), (1920, 1080))
 ZOOMS = (1.0, 1.5, 2.0)
+NARROWEST = 340
+"""Below so many pixels at 100% text, cells stand narrower than they would like."""
 
 
 def cut(window: Any) -> list[str]:
@@ -23,10 +28,15 @@ def cut(window: Any) -> list[str]:
     result = []
     page = window.page
     for widget in page.findChildren(QWidget):
-        if not isinstance(widget, Words | MeasureRow | PictureView) or not widget.isVisible():
+        if (
+            not isinstance(widget, Words | MeasureRow | PictureView | CountCell | ChoiceField | Link)
+            or not widget.isVisible()
+        ):
             continue
         needed = widget.heightForWidth(widget.width()) if widget.hasHeightForWidth() else widget.sizeHint().height()
         right = widget.mapTo(page, widget.rect().topRight()).x()
+        if isinstance(widget, CountCell | ChoiceField) and widget.width() < widget.minimumSizeHint().width():
+            result.append(f"narrow {widget.accessibleName()}")
         if widget.height() < needed or right > page.width():
             result.append(f"{type(widget).__name__} {widget.accessibleName() or getattr(widget, 'text', str)()}")
     return result
@@ -47,3 +57,35 @@ def test_nothing_is_cut(open_window: Any, qtbot: Any, design: Design) -> None:
             window.look.set_zoom(zoom)
             qtbot.waitUntil(lambda: cut(window) == [])
             assert window.page_scroll.horizontalScrollBar().maximum() == 0
+
+
+CELLS_OF: dict[Form, tuple[str, str, str, str]] = {
+    "percent-of-total": ("9.2%", "412", "17.1%", "409"),
+    "pairs": ("12", "21", "9", "58"),
+    "person-time": ("38", "4,120", "70", "3,980"),
+    "risk-at-time": ("9%", "6 to 12", "17%", "13 to 21"),
+}
+
+
+@pytest.mark.parametrize("form", FORMS)
+def test_nothing_is_cut_in_any_form(open_window: Any, qtbot: Any, form: Form) -> None:
+    """Every form with all its rarer fields open, a check that asks to look again, and the fold open."""
+    record = worked_example()
+    outcome = editing.in_form(record.outcomes[0], form)
+    for field, text in zip(CELLS, CELLS_OF.get(form, ()), strict=False):
+        outcome = editing.edit_text(outcome, field, text)
+    outcome = editing.edit_text(outcome, "paper_text", "0.49 (0.32 to 0.75), P = 0.9")
+    window = open_window(editing.with_outcome(record, 0, outcome))
+    rare = window.printed.rare
+    qtbot.waitUntil(lambda: rare.check.sentences != [])
+    for link in rare.optional.links.values():
+        if link.isVisible():
+            link.click()
+    window.actions_by_key["more"].trigger()
+    for width, height in ((1280, 800), (1024, 700), (700, 600), (480, 600)):
+        for zoom in (1.0, 1.5, 2.0):
+            if width / zoom < NARROWEST:
+                continue
+            window.resize(width, height)
+            window.look.set_zoom(zoom)
+            qtbot.waitUntil(lambda: cut(window) == [])

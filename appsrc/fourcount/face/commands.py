@@ -101,8 +101,12 @@ class Commands(QObject):
         self._session.change_outcome(editing.with_welcome(self._session.outcome, key == "welcome"))
 
     def choose_form(self, key: Form) -> None:
-        """Take a form of print by its key."""
-        self._session.change_outcome(editing.in_form(self._session.outcome, key))
+        """Take a form of print by its key. Empty strata begin as 38 of 412, as most papers print them."""
+        before = self._session.outcome
+        outcome = editing.in_form(before, key)
+        if key == "strata" and not editing.typed_texts(before):
+            outcome = editing.with_of_total(outcome, True)
+        self._session.change_outcome(outcome)
 
     def choose(self, field: str, choice: object) -> None:
         """Take what was chosen in one of the column's rarer choices."""

@@ -113,7 +113,8 @@ class OptionalFields(FieldsView):
     def _on_opened(self, key: str) -> None:
         self._opened.add(key)
         self.show_state(self._outcome)
-        self.rows[key].stops[0].setFocus(Qt.FocusReason.OtherFocusReason)
+        if key in self.rows:
+            self.rows[key].stops[0].setFocus(Qt.FocusReason.OtherFocusReason)
 
     def _on_closed(self, key: str) -> None:
         self._opened.discard(key)

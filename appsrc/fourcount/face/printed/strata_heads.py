@@ -2,7 +2,8 @@
 
 from __future__ import annotations
 
-from PySide6.QtCore import Qt
+from PySide6.QtCore import QSize, Qt
+from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QGridLayout, QLabel
 
 from fourcount.face.fields import QuietField
@@ -11,6 +12,21 @@ from fourcount.record.outcome import Outcome
 from fourcount.wording import labels
 
 RIGHT = Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter
+
+
+class ElidedLabel(QLabel):
+    """A word that gives way where the column is narrow."""
+
+    def minimumSizeHint(self) -> QSize:
+        return QSize(0, super().minimumSizeHint().height())
+
+    def paintEvent(self, _event: QPaintEvent) -> None:
+        painter = QPainter(self)
+        painter.setPen(self.palette().color(self.foregroundRole()))
+        area = self.contentsRect()
+        words = self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, area.width())
+        painter.drawText(area, self.alignment(), words)
+        painter.end()
 
 
 class StrataHeads:
@@ -32,7 +48,7 @@ class StrataHeads:
         }
         self.fields = (*self.labels.values(), *self.headings.values())
         self._roles = {key: QLabel() for key in ("first", "second", "left", "right")}
-        self._repeated = {key: QLabel() for key in ("left", "right", "all")}
+        self._repeated = {key: ElidedLabel() for key in ("left", "right", "all")}
         self._all_first = QLabel(labels.ALL)
         for place, position in enumerate(("first", "second")):
             layout.addWidget(self.labels[position], 0, 1 + 2 * place, 1, 2)
@@ -61,8 +77,7 @@ class StrataHeads:
             field.show_text(getattr(outcome, f"{column}_heading_text"))
             field.setPlaceholderText(labels.HINTS[f"{column}_heading{cases}"])
             words = field.text().strip() or field.placeholderText()
-            repeated = self._repeated[column]
-            repeated.setText(repeated.fontMetrics().elidedText(words, Qt.TextElideMode.ElideRight, self._look.px(56)))
+            self._repeated[column].setText(words)
         for column in ("left", "right"):
             self._roles[column].setText(labels.ROLES["counted"] if outcome.counted == column else "")
         if of_total and outcome.counted == "right":
