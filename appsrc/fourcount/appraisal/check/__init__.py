@@ -38,8 +38,8 @@ def check(outcome: Outcome, choices: Choices) -> CheckFindings:
     Of a figure printed after adjustment only what needs no counts is asked. Where percentages fit several counts, those
     nearest to them are taken, and others if only these give the print.
     """
-    # The counts do not depend on the family, and this one is never slow.
-    findings = appraise(outcome, Choices(family="score", level=choices.level))
+    # Only what the table gives is needed: it depends neither on the family nor on figures that may follow later.
+    findings = appraise(outcome, Choices(family="score", level=choices.level), deferring=True)
     paper = read_paper(outcome.paper_text, outcome.paper_measure)
     adjusted = read_paper(outcome.adjusted_text, outcome.adjusted_measure, "adjusted_text")
     found = check_figures(paper.figures, basis_of(findings, outcome), choices)
