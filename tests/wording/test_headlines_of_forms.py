@@ -31,15 +31,15 @@ def meaning(key, outcome):
         (
             paired(),
             (
-                "Of 100 people with usual care about 35 fell at least once within 12 months; of 100 with night lights "
-                "about 25. That is 10 fewer, and could be as few as 2 or as many as 17 (95% interval)."
+                "Of 100 people with usual care about 35 fell at least once within 12 months; of 100 with night "
+                "lights about 25. That is 10 fewer, and could be as few as 2 or as many as 17 (95% interval)."
             ),
         ),
         (
             paired("before-after", first_label_text="After", second_label_text="Before"),
             (
-                "Of 100 people in the period “Before” about 35 fell at least once within 12 months; of 100 in the period "
-                "“After” about 25. That is 10 fewer, and could be as few as 2 or as many as 17 (95% interval)."
+                "Of 100 people in the period “Before” about 35 fell at least once within 12 months; of 100 in the "
+                "period “After” about 25. That is 10 fewer, and could be as few as 2 or as many as 17 (95% interval)."
             ),
         ),
         (
@@ -51,54 +51,56 @@ def meaning(key, outcome):
         (
             person_time(design="trial"),
             (
-                "With usual care there were 17.1 events (“fell at least once”) per 1,000 person-years; with night lights "
-                "9.2. That is 7.9 fewer, and could be as few as 3.0 or as many as 13.1 (95% interval)."
+                "With usual care there were 17.1 events (“fell at least once”) per 1,000 person-years; with night "
+                "lights 9.2. That is 7.9 fewer, and could be as few as 3.0 or as many as 13.1 (95% interval)."
             ),
         ),
         (
             person_time((0, 4120, 3, 4090), design="trial"),
             (
-                "With usual care there were 7.3 events (“fell at least once”) per 10,000 person-years; with night lights "
-                "none. That is 7.3 fewer, and could be anything from 21.6 fewer to 2.0 more (95% interval): compatible "
-                "with fewer and with more."
+                "With usual care there were 7.3 events (“fell at least once”) per 10,000 person-years; with night "
+                "lights none. That is 7.3 fewer, and could be anything from 21.6 fewer to 2.0 more (95% interval): "
+                "compatible with fewer and with more."
             ),
         ),
         (
             at_time(level="90%"),
             (
-                "Of 100 people with usual care about 17 fell at least once within 12 months; of 100 with night lights "
-                "about 9. That is 8 fewer, and could be as few as 3 or as many as 13 (90% interval)."
+                "Of 100 people with usual care about 17 fell at least once within 12 months; of 100 with night "
+                "lights about 9. That is 8 fewer, and could be as few as 3 or as many as 13 (90% interval)."
             ),
         ),
         (
             effect_only(),
             (
-                "The paper prints a hazard ratio: at any moment, among people still without it, the rate of the event with "
-                "night lights was 0.72 times that with usual care (95% interval 0.55 to 0.92). Without counts it cannot be "
-                "checked against them, and it compares rates from moment to moment, and is no risk ratio."
+                "The paper prints a hazard ratio: at any moment, among people still without it, the rate of the "
+                "event with night lights was 0.72 times that with usual care (95% interval 0.55 to 0.92). Without "
+                "counts it cannot be checked against them, and it compares rates from moment to moment, and is no "
+                "risk ratio."
             ),
         ),
         (
             effect_only("odds_ratio", adjusted_for_text="age"),
             (
-                "The paper prints an odds ratio, adjusted for age: the odds that a person with night lights fell at least "
-                "once within 12 months were 0.72 times those with usual care (95% interval 0.55 to 0.92). Without counts "
-                "it cannot be checked against them, and odds are not shares of people."
+                "The paper prints an odds ratio, adjusted for age: the odds that a person with night lights fell at "
+                "least once within 12 months were 0.72 times those with usual care (95% interval 0.55 to 0.92). "
+                "Without counts it cannot be checked against them, and odds are not shares of people."
             ),
         ),
         (
             effect_only("risk_ratio", index_group="second"),
             (
-                "The paper prints a risk ratio, here turned round: the risk with usual care was 1.39 times that with night "
-                "lights (95% interval 1.09 to 1.82). Without counts it cannot be checked against them, and by itself it "
-                "does not say how large the risks are."
+                "The paper prints a risk ratio, here turned round: the risk with usual care was 1.39 times that with "
+                "night lights (95% interval 1.09 to 1.82). Without counts it cannot be checked against them, and by "
+                "itself it does not say how large the risks are."
             ),
         ),
         (
             strata(rows=CONFOUNDED, design="trial"),
             (
-                "Within strata, per 100 people as many fell at least once within 12 months with night lights as with usual "
-                "care (95% interval 8.8 fewer to 8.8 more). Crude, without strata, it is 15.0 more per 100 (7.7 to 22.4)."
+                "Within strata, per 100 people as many fell at least once within 12 months with night lights as with "
+                "usual care (95% interval 8.8 fewer to 8.8 more). Crude, without strata, it is 15.0 more per 100 "
+                "(7.7 to 22.4)."
             ),
         ),
     ],

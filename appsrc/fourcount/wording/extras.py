@@ -4,6 +4,8 @@ from __future__ import annotations
 
 from dataclasses import dataclass, replace
 
+from msgspec import structs
+
 from fourcount.appraisal.findings import (
     Clusters,
     EValues,
@@ -22,7 +24,7 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
 from fourcount.wording.form import lacking
-from fourcount.wording.lines.line import MeasureLine, figure_line, note_of, withheld_line
+from fourcount.wording.lines.line import MeasureLine, figure_line, withheld_line
 from fourcount.wording.printed import paper_measure_name
 
 SCENARIOS = ("none", "all", "worst", "best", "ratio")
@@ -196,18 +198,18 @@ def _fragility(found: Fragility, case: _Case) -> MeasureLine:
 
 def _attributable(key: str, figure: Figure, case: _Case) -> MeasureLine:
     note = (EXPOSED_NOTE if key == "attributable_exposed" else POPULATION_NOTE).format(not_one=NOT_ONE)
-    line = figure_line(key, NAMES[key], figure, detail=case.choices.family, group="more", kind="")
-    below = isinstance(figure.interval, Interval) and figure.interval.low < 0
-    interval = _fraction_interval(figure) if below else line.interval
-    return replace(line, interval=interval, note=note_of(figure, note), low=None, estimate_value=None, high=None)
+    below = _fraction_interval(figure.interval)
+    shown = structs.replace(figure, interval=Interval(low=0.0, high=1.0)) if below else figure
+    line = figure_line(key, NAMES[key], shown, detail=case.choices.family, notes=(note,), group="more", kind="")
+    return replace(line, interval=below or line.interval, low=None, estimate_value=None, high=None)
 
 
-def _fraction_interval(figure: Figure) -> str:
-    """Limits of a fraction, of which the lower lies below none: the exposure may prevent as well."""
-    if not isinstance(figure.interval, Interval):
+def _fraction_interval(interval: limits.AnyInterval) -> str:
+    """Limits of a fraction of which the lower lies below none, since the exposure may prevent as well; else ""."""
+    if not isinstance(interval, Interval) or interval.low >= 0:
         return ""
-    low, high = figure.interval.low, figure.interval.high
-    below = "below" if low == -float("inf") else f"{numbers.MINUS}{numbers.percent_whole(-low).rstrip('%')}"
+    low, high = interval.low, interval.high
+    below = "below 0%" if low == -float("inf") else f"{numbers.MINUS}{numbers.percent_whole(-low).rstrip('%')}"
     above = f"{numbers.MINUS}{numbers.percent_whole(-high)}" if high < 0 else numbers.percent_whole(high)
     return f"{below}{numbers.TO}{above}"
 
