@@ -64,19 +64,22 @@ def _answer(given: list[str]) -> int:
         raise MistypedError(words.UNKNOWN.format(kind="option", text=_quoted(unknown[0])))
     question = _question(wanted)
     from fourcount.appraisal.appraise import appraise
+    from fourcount.record.outcome import PAIRED_DESIGNS
 
     outcome, choices = question.outcome, question.choices
-    findings = appraise(outcome, choices)
     if wanted.json:
         import json
 
         from fourcount.publish.answer import checked
         from fourcount.publish.contract import contract
 
-        published = {**contract(outcome, choices, findings), **checked(question)}
+        published = {**contract(outcome, choices, appraise(outcome, choices)), **checked(question)}
         return _say(json.dumps(published, indent=2, allow_nan=False) + "\n")
     from fourcount.publish.listing import listing
 
+    # Of unpaired counts only exact figures and what stands under the fold need numpy, and the text shows no fold.
+    light = choices.family != "exact" and outcome.design not in PAIRED_DESIGNS
+    findings = appraise(outcome, choices, deferring=light)
     return _say(_printed(question) + listing(outcome, findings, choices))
 
 
