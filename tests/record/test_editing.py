@@ -13,7 +13,19 @@ from fourcount.record import editing
 from fourcount.record.entry.readings import Proportion
 from fourcount.record.entry.risk import read_risk
 from fourcount.record.entry.table import read_table
-from fourcount.record.outcome import CELLS, DESIGNS, Effect, EventsAndOthers, EventsOfTotal, Layout, Outcome, Patient
+from fourcount.record.outcome import (
+    CELLS,
+    DESIGNS,
+    PAPER_MEASURES,
+    WHERE,
+    Counting,
+    Effect,
+    EventsAndOthers,
+    EventsOfTotal,
+    Layout,
+    Outcome,
+    Patient,
+)
 from fourcount.record.paper import FAMILIES, Choices, Record
 
 TABLE = EventsAndOthers(first_left_text="38", first_right_text="1,374", second_left_text="70", second_right_text="338*")
@@ -36,12 +48,17 @@ TEXT_FIELDS = sorted({*CELLS, *editing.OUTCOME_TEXTS, *editing.PATIENT_TEXTS})
 ACTIONS: dict[str, tuple[Any, set[str]]] = {
     "swap": (editing.swap_groups, {"index_group"}),
     "count": (editing.count_other_outcome, {"counted", "patient"}),
-    "form": (lambda outcome: editing.in_form(outcome, EventsOfTotal), {"table"}),
+    "form": (lambda outcome: editing.in_form(outcome, "events-of-total"), {"table"}),
     "clear": (editing.clear_table, {"table"}),
     "design": (lambda outcome: editing.with_design(outcome, "survey"), {"design"}),
     "welcome": (lambda outcome: editing.with_welcome(outcome, welcome=True), {"left_welcome"}),
     "layout": (lambda outcome: editing.with_layout(outcome, "across"), {"layout"}),
     "effect": (lambda outcome: editing.with_effect(outcome, "risk_ratio"), {"patient"}),
+    "counting": (lambda outcome: editing.with_counting(outcome, "events"), {"counting"}),
+    "varied": (lambda outcome: editing.with_follow_up_varied(outcome, varied=True), {"follow_up_varied"}),
+    "where": (lambda outcome: editing.with_where(outcome, "abstract"), {"where"}),
+    "paper": (lambda outcome: editing.with_paper_measure(outcome, "hazard_ratio"), {"paper_measure"}),
+    "adjusted": (lambda outcome: editing.with_adjusted_measure(outcome, "hazard_ratio"), {"adjusted_measure"}),
 }
 
 
@@ -178,7 +195,7 @@ def test_counting_the_other_outcome_twice_gives_an_equal_risk(text: str) -> None
 
 def test_a_readable_row_takes_the_other_form() -> None:
     """38 and 374 become 38 of 412; a row that cannot be read keeps its text."""
-    table = editing.in_form(OUTCOME, EventsOfTotal).table
+    table = editing.in_form(OUTCOME, "events-of-total").table
     assert table == EventsOfTotal(
         first_left_text="38", first_right_text="1412", second_left_text="70", second_right_text="338*"
     )
@@ -186,15 +203,15 @@ def test_a_readable_row_takes_the_other_form() -> None:
 
 def test_the_form_it_has_changes_nothing() -> None:
     """Asking for the form that the table has gives the same outcome."""
-    assert editing.in_form(OUTCOME, EventsAndOthers) is OUTCOME
+    assert editing.in_form(OUTCOME, "events-and-others") is OUTCOME
 
 
 @pytest.mark.parametrize(("left", "right"), [("38/412", ""), ("", "374/412"), ("38 (9.2%)", "374"), ("38", "374/412")])
 def test_a_total_in_a_cell_survives_the_other_form(left: str, right: str) -> None:
     """A row that says its total in one cell gives the same counts in the other form, and back."""
     row = EventsAndOthers(first_left_text=left, first_right_text=right)
-    there = editing.in_form(Outcome(table=row), EventsOfTotal)
-    back = editing.in_form(there, EventsAndOthers)
+    there = editing.in_form(Outcome(table=row), "events-of-total")
+    back = editing.in_form(there, "events-and-others")
     for outcome in (there, back):
         reading = read_table(outcome.table)
         assert (reading.first.left, reading.first.right, reading.first.total) == (38, 374, 412)
@@ -205,9 +222,9 @@ def test_a_total_in_a_cell_survives_the_other_form(left: str, right: str) -> Non
 def test_the_other_form_and_back_keeps_every_count(counts: list[int]) -> None:
     """Four plain counts come back as they were typed."""
     outcome = Outcome(table=EventsAndOthers(**dict(zip(CELLS, map(str, counts), strict=True))))
-    there = editing.in_form(outcome, EventsOfTotal)
+    there = editing.in_form(outcome, "events-of-total")
     assert read_table(there.table) == read_table(outcome.table)
-    assert editing.in_form(there, EventsAndOthers) == outcome
+    assert editing.in_form(there, "events-and-others") == outcome
 
 
 @pytest.mark.parametrize("welcome", [True, False])
@@ -229,7 +246,24 @@ def test_choices_take_only_what_there_is() -> None:
     for family in FAMILIES:
         assert editing.with_family(RECORD, family).choices.family == family
     wrong: Any = "guess"
-    for refuse in (editing.with_design, editing.with_layout, editing.with_effect):
+    for measure in PAPER_MEASURES:
+        assert editing.with_paper_measure(OUTCOME, measure).paper_measure == measure
+        assert editing.with_adjusted_measure(OUTCOME, measure).adjusted_measure == measure
+    for where in WHERE:
+        assert editing.with_where(OUTCOME, where).where == where
+    for counting in get_args(Counting):
+        assert editing.with_counting(OUTCOME, counting).counting == counting
+    refusing = (
+        editing.with_design,
+        editing.with_layout,
+        editing.with_effect,
+        editing.with_counting,
+        editing.with_where,
+        editing.with_paper_measure,
+        editing.with_adjusted_measure,
+        editing.in_form,
+    )
+    for refuse in refusing:
         with pytest.raises(ValueError, match="guess"):
             refuse(OUTCOME, wrong)
     with pytest.raises(ValueError, match="guess"):

@@ -24,7 +24,6 @@ from fourcount.record.outcome import (
     Strata,
     Stratum,
     Table,
-    form_of,
 )
 
 if TYPE_CHECKING:
@@ -39,7 +38,7 @@ UNPAIRED: dict[Design, Design] = {"matched": "case-control", "paired": "trial", 
 """What a design of pairs is without its pairs: a crossover trial is a trial."""
 
 
-def in_form(outcome: Outcome, form: Form | type[Table]) -> Outcome:
+def in_form(outcome: Outcome, form: Form) -> Outcome:
     """The same table in another form of print: ``38 · 374`` becomes ``38 of 412``, and back.
 
     A row whose two counts are known is converted: its left cell stays as typed where it can (a blank one is filled),
@@ -47,12 +46,11 @@ def in_form(outcome: Outcome, form: Form | type[Table]) -> Outcome:
     leave their margins; no margins give pairs back. Choosing pairs makes the design one of pairs, and leaving them
     makes it one without.
     """
-    key = form if isinstance(form, str) else form_of(form())
-    kind = FORMS[one_of(key, FORMS)]
+    kind = FORMS[one_of(form, FORMS)]
     table = outcome.table
     if type(table) is kind:
         return outcome
-    changed = replace(outcome, table=_table(table, kind), design=_design(outcome.design, key))
+    changed = replace(outcome, table=_table(table, kind), design=_design(outcome.design, form))
     return replace(changed, counted="left") if kind is PersonTime else changed
 
 
