@@ -6,9 +6,10 @@ from typing import TYPE_CHECKING
 
 import pytest
 from PySide6.QtCore import Qt
-from PySide6.QtGui import QAccessible
-from PySide6.QtWidgets import QLabel, QWidget
+from PySide6.QtGui import QAccessible, QGuiApplication
+from PySide6.QtWidgets import QApplication, QComboBox, QLabel, QWidget
 
+from fourcount.record.outcome import FORMS
 from fourcount.wording import labels
 from fourcount.wording.standing import STANDING
 
@@ -27,7 +28,31 @@ def focusable(hands: Hands) -> list[QWidget]:
     return [widget for widget in widgets if widget.isVisible() and widget.focusPolicy() != Qt.FocusPolicy.NoFocus]
 
 
-@pytest.mark.parametrize("state", ["first start", "example", "wrong", "case-control", "more"])
+def open_all_rows(hands: Hands) -> None:
+    """Open every row that few papers need."""
+    optional = hands.window.printed.rare.optional
+    assert optional is not None
+    for link in optional.links.values():
+        if link.isVisible():
+            link.click()
+
+
+@pytest.mark.parametrize("form", FORMS)
+def test_every_target_is_large_enough(hands: Hands, form: str) -> None:
+    """Whatever can be clicked is at least 24 pixels high and wide."""
+    hands.do("example")
+    hands.do(f"form-{form}")
+    open_all_rows(hands)
+    QApplication.processEvents()
+    small = [
+        f"{name_of(widget)} {widget.width()} x {widget.height()}"
+        for widget in focusable(hands)
+        if not isinstance(widget, QLabel) and min(widget.width(), widget.height()) < 24
+    ]
+    assert small == []
+
+
+@pytest.mark.parametrize("state", ["first start", "example", "wrong", "case-control", "more", "rows", "paste", *FORMS])
 def test_everything_that_takes_the_focus_has_a_name(hands: Hands, state: str) -> None:
     """In every state of the window each control says what it is."""
     if state != "first start":
@@ -38,15 +63,26 @@ def test_everything_that_takes_the_focus_has_a_name(hands: Hands, state: str) ->
         hands.choose(hands.window.printed.design, "case-control study")
     if state == "more":
         hands.do("more")
+    if state == "rows":
+        open_all_rows(hands)
+    if state == "paste":
+        QGuiApplication.clipboard().setText("38\t412\n70\t409")
+        hands.do("paste")
+    if state in FORMS:
+        hands.do(f"form-{state}")
     widgets = focusable(hands)
-    assert len(widgets) > 20
+    assert len(widgets) > 15
     assert [widget for widget in widgets if not name_of(widget).strip()] == []
 
 
-def test_names_tell_controls_apart(hands: Hands) -> None:
-    """No two controls that Tab leads to are called alike."""
+@pytest.mark.parametrize("form", FORMS)
+def test_names_tell_controls_apart(hands: Hands, form: str) -> None:
+    """No two controls that Tab leads to are called alike, in any form and with every rarer row open."""
     hands.do("example")
-    names = [name_of(widget) for widget in focusable(hands) if widget.focusPolicy() & Qt.FocusPolicy.TabFocus]
+    hands.do(f"form-{form}")
+    open_all_rows(hands)
+    stops = [widget for widget in focusable(hands) if widget.focusPolicy() & Qt.FocusPolicy.TabFocus]
+    names = [widget.accessibleName() if isinstance(widget, QComboBox) else name_of(widget) for widget in stops]
     assert sorted(names) == sorted(set(names))
 
 

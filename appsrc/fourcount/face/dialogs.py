@@ -69,8 +69,12 @@ def methods_window(look: Look, parent: QWidget) -> HelpWindow:
 
 def keys_window(look: Look, parent: QWidget, shortcuts: Sequence[tuple[str, str]]) -> HelpWindow:
     """The keys of every command, as this platform writes them."""
+    from PySide6.QtGui import QKeySequence
+
     parts: list[Part] = [("body", labels.KEYS_INTRO)]
-    for keys, words in (*labels.KEYS_MORE, *shortcuts):
+    paste = QKeySequence(QKeySequence.StandardKey.Paste).toString(QKeySequence.SequenceFormat.NativeText)
+    more = [(keys.format(paste=paste), words) for keys, words in labels.KEYS_MORE]
+    for keys, words in (*more, *shortcuts):
         parts.append(("body", f"{keys or labels.NO_KEYS}\t{words}"))
     return _window(look, parent, labels.HELP_TITLES["keys"], parts)
 

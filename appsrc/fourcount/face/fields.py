@@ -17,7 +17,7 @@ from PySide6.QtGui import (
     QPaintEvent,
     QPen,
 )
-from PySide6.QtWidgets import QComboBox, QLineEdit, QSizePolicy, QWidget
+from PySide6.QtWidgets import QComboBox, QLineEdit, QMenu, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
@@ -127,16 +127,20 @@ class TextField(QLineEdit):
             parent = parent.parentWidget()
         return False
 
+    def own_paste(self, action: QAction, menu: QMenu) -> QAction:
+        """The entry of a menu that pastes as the key does, in place of Qt's own."""
+        ours = QAction(action.text(), menu)
+        ours.setEnabled(action.isEnabled())
+        ours.triggered.connect(self.paste_text)
+        return ours
+
     def contextMenuEvent(self, event: QContextMenuEvent) -> None:
         menu = self.createStandardContextMenu()
         for action in menu.actions():
             if action.objectName() in ("edit-undo", "edit-redo"):
                 menu.removeAction(action)
             elif action.objectName() == "edit-paste":
-                ours = QAction(action.text(), menu)
-                ours.setEnabled(action.isEnabled())
-                ours.triggered.connect(self.paste_text)
-                menu.insertAction(action, ours)
+                menu.insertAction(action, self.own_paste(action, menu))
                 menu.removeAction(action)
         if menu.actions() and menu.actions()[0].isSeparator():
             menu.removeAction(menu.actions()[0])

@@ -216,14 +216,15 @@ DISMISS = "Dismiss"
 KEYS_INTRO = "Tab goes through the fields in reading order. In the table, arrow keys and Enter go from count to count."
 KEYS_MORE = (
     ("Tab, Shift+Tab", "next field, previous field"),
-    ("Arrow keys, Enter", "from count to count"),
+    ("Arrow keys, Enter", "from count to count; Enter at the end of strata adds a row"),
+    ("{paste} in the first column", "a table or a sentence fills the table, anything else its field"),
     ("Enter or Space on a measure", "show or hide its working"),
-    ("Escape", "close the working, or a help window"),
+    ("Escape", "leave what was pasted, close the working or a help window"),
 )
 
 ABOUT = (
     "Fourcount {version}",
-    "Re-enter the four counts of a published table and see what they say, and what that means for one patient.",
+    "Re-enter what a paper prints, see whether it adds up, what it says, and what that means for one patient.",
     "Free software under the MIT licence. It works offline, sends nothing, and keeps no file.",
     "Text in the system's font {font}; computed with numpy {numpy} and scipy {scipy}; drawn with Qt {qt}.",
 )
