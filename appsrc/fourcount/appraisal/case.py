@@ -46,7 +46,7 @@ class Case:
     patient: PatientFindings | Gap
     marks: tuple[Mark, ...] = ()
     extras: Extras = field(default_factory=Extras)
-    strata: StrataFindings | None = None
+    strata: StrataFindings | Gap | None = None
     randomised: tuple[Randomised, ...] = ()
 
     @property
@@ -54,6 +54,11 @@ class Case:
         if not isinstance(self.given, Counts):
             raise TypeError(f"the form {self.form} has no four counts")
         return self.given
+
+    @property
+    def pooled(self) -> StrataFindings | None:
+        """The strata, where there are any and the design does not refuse them."""
+        return self.strata if isinstance(self.strata, StrataFindings) else None
 
     @property
     def carried(self) -> PatientFindings | None:

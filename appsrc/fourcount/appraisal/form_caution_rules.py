@@ -28,7 +28,7 @@ def _parting(case: Case, measures: tuple[str, ...]) -> tuple[Facts, ...]:
     parts: list[Facts] = []
     for key in measures:
         crude, pooled = value(case.figures.get(key.removeprefix("pooled_"))), value(case.figures.get(key))
-        if case.strata is None or key not in case.strata.parting or crude is None or pooled is None:
+        if case.pooled is None or key not in case.pooled.parting or crude is None or pooled is None:
             continue
         parts.append({"measure": key.removeprefix("pooled_"), "crude": crude, "pooled": pooled})
     return tuple(parts)
@@ -36,7 +36,7 @@ def _parting(case: Case, measures: tuple[str, ...]) -> tuple[Facts, ...]:
 
 def strata_unlike(case: Case) -> Facts | None:
     """The strata's odds ratios differ by more than chance easily explains, so that one pooled figure hides it."""
-    found = None if case.strata is None else case.strata.homogeneity
+    found = None if case.pooled is None else case.pooled.homogeneity
     if found is None or isinstance(found, Gap) or found.p >= UNLIKE:
         return None
     return {"p": found.p}
@@ -44,7 +44,7 @@ def strata_unlike(case: Case) -> Facts | None:
 
 def no_meta_analysis(case: Case) -> Facts | None:
     """Strata of one study are pooled; several studies are not to be pooled so."""
-    return {"strata": len(case.strata.strata)} if case.strata is not None and len(case.strata.strata) > 1 else None
+    return {"strata": len(case.pooled.strata)} if case.pooled is not None and len(case.pooled.strata) > 1 else None
 
 
 def follow_up_varied(case: Case) -> Facts | None:

@@ -5,13 +5,13 @@ from __future__ import annotations
 import math
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.cautions import cautions_for
 from fourcount.appraisal.conversion import converted_figure
 from fourcount.appraisal.extras.e_values import E_VALUE_MEASURES, OBSERVATIONAL, e_values
 from fourcount.appraisal.extras.of_counts import outcome_is_common
 from fourcount.appraisal.extras.printed import DIFFERENCES, PRINTED, USUAL_LEVEL, as_figure, read_effect
 from fourcount.appraisal.findings import (
     Conversion,
+    EValues,
     Extras,
     Figure,
     Gap,
@@ -21,9 +21,9 @@ from fourcount.appraisal.findings import (
     PrintedFigure,
     Probability,
     Recovered,
-    Totals,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
+from fourcount.appraisal.forms.whole import whole
 from fourcount.appraisal.gating import SUPPORT, withheld_of_effects
 from fourcount.appraisal.patient import carry_effect
 from fourcount.appraisal.postponing import Pace
@@ -51,72 +51,40 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     marks = read.marks + marks_of(typed)
     printed = read.effect
     figure = printed if isinstance(printed, Gap) else _figure(printed, outcome)
-    if isinstance(printed, Gap) or isinstance(figure, Gap):
-        key = outcome.paper_measure if isinstance(printed, Gap) else printed.measure
-        gap = figure if isinstance(figure, Gap) else Gap("effect-unreadable")
-        return _said(nothing_yet(gap, form="effect-only", measures=(key,), marks=marks), printed)
+    if isinstance(printed, Gap):
+        return nothing_yet(printed, form="effect-only", measures=(outcome.paper_measure,), marks=marks)
+    if isinstance(figure, Gap):
+        return nothing_yet(figure, form="effect-only", measures=(printed.measure,), marks=marks, given=printed)
     figure, recovered = _with_interval(figure, printed, choices)
-    figures: dict[str, Figure] = {printed.measure: figure}
     start = _start(typed)
-    conversion, patient = _conversion(printed, figure, start), _patient(printed, figure, start, outcome)
-    extras = Extras(
-        e_value=e_values(
-            figure, printed.measure, common=outcome_is_common(outcome, None), adjusted=is_adjusted(printed, outcome)
-        )
-        if outcome.design in OBSERVATIONAL and printed.measure in E_VALUE_MEASURES
-        else None,
-        recovered=recovered,
-    )
     p = recovered if isinstance(recovered, Gap) else recovered.p
-    test = Probability(p=p, method=RECOVERED)
+    figures: dict[str, Figure] = {printed.measure: figure}
     case = Case(
         outcome=outcome,
         form="effect-only",
         given=printed,
         choices=choices,
         figures=figures,
-        test=test,
-        conversion=conversion,
-        patient=patient,
+        test=Probability(p=p, method=RECOVERED),
+        conversion=_conversion(printed, figure, start),
+        patient=_patient(printed, figure, start, outcome),
         marks=marks,
-        extras=extras,
+        extras=Extras(e_value=_e_value(printed, figure, outcome), recovered=recovered),
     )
-    return OutcomeFindings(
-        form="effect-only",
-        counts=Gap("not-counts"),
-        given=printed,
-        totals=Totals(),
-        marks=marks,
-        measures={printed.measure: figure},
-        test=test,
-        conversion=conversion,
-        patient=patient,
-        cautions=cautions_for(case),
-        extras=extras,
-    )
+    return whole(case, figures)
+
+
+def _e_value(printed: PrintedFigure, figure: Figure, outcome: Outcome) -> EValues | Gap | None:
+    """Of a printed ratio outside trials."""
+    if outcome.design not in OBSERVATIONAL or printed.measure not in E_VALUE_MEASURES:
+        return None
+    common = outcome_is_common(outcome, None)
+    return e_values(figure, printed.measure, common=common, adjusted=is_adjusted(printed, outcome))
 
 
 def is_adjusted(printed: PrintedFigure, outcome: Outcome) -> bool:
     """Whether the effect is an adjusted one, by its own print or since the reader says for what."""
     return printed.adjusted or bool(outcome.adjusted_for_text.strip())
-
-
-def _said(findings: OutcomeFindings, printed: PrintedFigure | Gap) -> OutcomeFindings:
-    """What was read stays told where only this design or this turn of it has no figure."""
-    if isinstance(printed, Gap):
-        return findings
-    return OutcomeFindings(
-        form=findings.form,
-        counts=Gap("not-counts"),
-        given=printed,
-        totals=findings.totals,
-        marks=findings.marks,
-        measures=findings.measures,
-        test=findings.test,
-        conversion=findings.conversion,
-        patient=findings.patient,
-        cautions=(),
-    )
 
 
 def _figure(printed: PrintedFigure, outcome: Outcome) -> Figure | Gap:

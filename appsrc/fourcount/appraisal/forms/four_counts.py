@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.cautions import cautions_for
 from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.conversion import convert
 from fourcount.appraisal.extras.of_counts import extras_of_counts
@@ -16,6 +15,7 @@ from fourcount.appraisal.findings import (
     PatientFindings,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
+from fourcount.appraisal.forms.whole import whole
 from fourcount.appraisal.gating import Support, support_of
 from fourcount.appraisal.losses import losses_of
 from fourcount.appraisal.measures import Figures, Table, all_figures, measures, own_test
@@ -30,8 +30,7 @@ from fourcount.stats.estimates import risk
 
 def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
     """All that four counts say, whichever of three ways they are printed in."""
-    form = form_of(outcome.table)
-    reading, typed = read(outcome), typed_risk(outcome)
+    form, reading, typed = form_of(outcome.table), read(outcome), typed_risk(outcome)
     clusters, adjusted = clusters_of(outcome), adjusted_of(outcome)
     losses = losses_of(outcome, reading.counts)
     marks = reading.marks + marks_of(typed) + clusters.marks + losses.marks + adjusted.marks
@@ -43,34 +42,20 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     figures = all_figures(table, support)
     start = starting_risk(typed, risk(counts.reference_events, counts.reference_total), support)
     conversion, patient = _at(start, figures, outcome, support)
-    test = Gap(support.refused) if support.refused else own_test(table)
-    extras = extras_of_counts(outcome, table, figures, support, clusters, losses, adjusted, pace)
     case = Case(
         outcome=outcome,
         form=form,
         given=counts,
         choices=choices,
         figures=figures,
-        test=test,
+        test=Gap(support.refused) if support.refused else own_test(table),
         conversion=conversion,
         patient=patient,
         marks=marks,
-        extras=extras,
+        extras=extras_of_counts(outcome, table, figures, support, clusters, losses, adjusted, pace),
         randomised=losses.randomised,
     )
-    return OutcomeFindings(
-        form=form,
-        counts=counts,
-        given=counts,
-        totals=reading.totals,
-        marks=marks,
-        measures=measures(figures, support, welcome=outcome.welcome),
-        test=test,
-        conversion=conversion,
-        patient=patient,
-        cautions=cautions_for(case),
-        extras=extras,
-    )
+    return whole(case, measures(figures, support, welcome=outcome.welcome), reading.totals)
 
 
 def _at(

@@ -4,18 +4,24 @@ from __future__ import annotations
 
 from collections.abc import Iterable
 
-from fourcount.appraisal.findings import Gap, Mark, OutcomeFindings, Totals
+from fourcount.appraisal.findings import Gap, Mark, OutcomeFindings, PrintedFigure, Totals
 from fourcount.record.outcome import Form
 
 
 def nothing_yet(
-    gap: Gap, *, form: Form, measures: Iterable[str], totals: Totals | None = None, marks: tuple[Mark, ...] = ()
+    gap: Gap,
+    *,
+    form: Form,
+    measures: Iterable[str],
+    totals: Totals | None = None,
+    marks: tuple[Mark, ...] = (),
+    given: PrintedFigure | None = None,
 ) -> OutcomeFindings:
-    """Every figure is withheld for one and the same reason."""
+    """Every figure is withheld for one and the same reason; an effect that was read stays told all the same."""
     return OutcomeFindings(
         form=form,
-        counts=gap,
-        given=gap,
+        counts=gap if given is None else Gap("not-counts"),
+        given=gap if given is None else given,
         totals=totals or Totals(),
         marks=marks,
         measures=dict.fromkeys(measures, gap),

@@ -5,14 +5,12 @@ from __future__ import annotations
 from collections.abc import Callable
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.cautions import cautions_for
 from fourcount.appraisal.clusters import ReadClusters, clusters_of
 from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
 from fourcount.appraisal.extras.of_counts import outcome_is_common
-from fourcount.appraisal.extras.printed import adjusted_of
+from fourcount.appraisal.extras.printed import ReadEffect, adjusted_of
 from fourcount.appraisal.findings import (
     PAIR_MEASURES,
-    AnyNumberNeeded,
     Extras,
     Figure,
     Gap,
@@ -23,6 +21,7 @@ from fourcount.appraisal.findings import (
     Totals,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
+from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import Withheld, withheld_of_pairs
 from fourcount.appraisal.measures import number_needed_from
 from fourcount.appraisal.postponing import PAIRS_NEED_NUMPY, Pace
@@ -37,8 +36,6 @@ from fourcount.stats.methods import PAIR_FAMILIES, method, test
 NEEDS_ALL = ("pair_risk_index", "pair_risk_reference", "pair_difference", "number_needed")
 """The measures that are of all pairs; the ratio is of those with an event, the odds ratio of the discordant ones."""
 
-Measure = Figure | AnyNumberNeeded | Gap
-
 
 def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
     """The paired difference and ratio, the odds ratio of the discordant pairs, and McNemar's test.
@@ -47,8 +44,7 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     """
     reading = read_pairs(outcome.table) if isinstance(outcome.table, Pairs) else PairsReading()
     clusters, adjusted = clusters_of(outcome), adjusted_of(outcome)
-    marks = reading.marks + clusters.marks + adjusted.marks
-    totals = _totals(reading)
+    marks, totals = reading.marks + clusters.marks + adjusted.marks, _totals(reading)
     lacking = _lacking(reading)
     if lacking is not None:
         return nothing_yet(lacking, form="pairs", measures=PAIR_MEASURES, totals=totals, marks=marks)
@@ -56,40 +52,31 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     withheld = {**unknown, **withheld_of_pairs(outcome)}
     figures = _figures(pairs, choices, pace, clusters, withheld)
     refused = withheld.get("pair_odds_ratio")
-    probability = Gap(refused) if refused else _test(pairs, choices, pace, clusters)
-    whole = Gap("concordant-pairs-unknown") if unknown else pairs
-    extras = Extras(
-        e_value=e_values(figures["pair_odds_ratio"], "odds_ratio", common=outcome_is_common(outcome, None))
-        if outcome.design in OBSERVATIONAL and not refused
-        else None,
-        clusters=clusters.clusters,
-        adjusted=adjusted.figure,
-    )
     nothing = Gap(refused or "carried-later")
     case = Case(
         outcome=outcome,
         form="pairs",
-        given=whole,
+        given=Gap("concordant-pairs-unknown") if unknown else pairs,
         choices=choices,
         figures=figures,
-        test=probability,
+        test=Gap(refused) if refused else _test(pairs, choices, pace, clusters),
         conversion=nothing,
         patient=nothing,
         marks=marks,
-        extras=extras,
+        extras=_extras(outcome, figures, clusters, adjusted),
     )
-    return OutcomeFindings(
-        form="pairs",
-        counts=Gap("not-counts"),
-        given=whole,
-        totals=totals,
-        marks=marks,
-        measures={key: _measure(key, figures, withheld, welcome=outcome.welcome) for key in PAIR_MEASURES},
-        test=probability,
-        conversion=nothing,
-        patient=nothing,
-        cautions=cautions_for(case),
-        extras=extras,
+    measures = {key: _measure(key, figures, withheld, welcome=outcome.welcome) for key in PAIR_MEASURES}
+    return whole(case, measures, totals)
+
+
+def _extras(outcome: Outcome, figures: dict[str, Figure], clusters: ReadClusters, adjusted: ReadEffect) -> Extras:
+    """A matched study's E-value, of its odds ratio."""
+    ratio = figures.get("pair_odds_ratio") if outcome.design in OBSERVATIONAL else None
+    common = outcome_is_common(outcome, None)
+    return Extras(
+        e_value=None if ratio is None else e_values(ratio, "odds_ratio", common=common),
+        clusters=clusters.clusters,
+        adjusted=adjusted.figure,
     )
 
 
@@ -168,9 +155,7 @@ def _measure(key: str, figures: dict[str, Figure], withheld: Withheld, *, welcom
         return Gap(withheld[key])
     if key == "number_needed":
         return number_needed_from(within_everybody(figures["pair_difference"]), welcome=welcome)
-    figure = figures[key]
-    both_missing = isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap)
-    return figure.estimate if both_missing and isinstance(figure.estimate, Gap) else figure
+    return given_or_why(figures[key])
 
 
 def _test(pairs: PairCounts, choices: Choices, pace: Pace, clusters: ReadClusters) -> Probability:

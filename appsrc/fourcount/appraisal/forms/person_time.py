@@ -3,11 +3,10 @@
 from __future__ import annotations
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.cautions import cautions_for
 from fourcount.appraisal.clusters import ReadClusters, clusters_of
 from fourcount.appraisal.extras.attributable import of_exposed
 from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
-from fourcount.appraisal.extras.printed import adjusted_of
+from fourcount.appraisal.extras.printed import ReadEffect, adjusted_of
 from fourcount.appraisal.findings import (
     RATE_MEASURES,
     Extras,
@@ -20,6 +19,7 @@ from fourcount.appraisal.findings import (
     Totals,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
+from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import withheld_of_rates
 from fourcount.appraisal.postponing import RATES_NEED_NUMPY, Pace
 from fourcount.record.entry.person_time import read_person_time
@@ -35,46 +35,39 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     table = outcome.table
     reading = read_person_time(table) if isinstance(table, PersonTime) else _BLANK
     clusters, adjusted = clusters_of(outcome), adjusted_of(outcome)
-    marks = reading.marks + clusters.marks + adjusted.marks
-    totals = _totals(reading)
+    marks, totals = reading.marks + clusters.marks + adjusted.marks, _totals(reading)
     rates = _rates(reading, outcome)
     if isinstance(rates, Gap):
         return nothing_yet(rates, form="person-time", measures=RATE_MEASURES, totals=totals, marks=marks)
     withheld = withheld_of_rates(outcome.design)
     figures = {} if withheld else _figures(rates, choices, pace, clusters)
     nothing = Gap(withheld["rate_ratio"]) if withheld else Gap("carried-later")
-    probability = nothing if withheld else _test(rates, choices, pace, clusters)
-    ratio = figures.get("rate_ratio")
-    extras = Extras(
-        e_value=e_values(ratio, "rate_ratio", common=False) if ratio and outcome.design in OBSERVATIONAL else None,
-        attributable_exposed=of_exposed(ratio) if ratio and outcome.design == "cohort" else None,
-        clusters=clusters.clusters,
-        adjusted=adjusted.figure,
-    )
     case = Case(
         outcome=outcome,
         form="person-time",
         given=rates,
         choices=choices,
         figures=figures,
-        test=probability,
+        test=nothing if withheld else _test(rates, choices, pace, clusters),
         conversion=nothing,
         patient=nothing,
         marks=marks,
-        extras=extras,
+        extras=_extras(outcome, figures.get("rate_ratio"), clusters, adjusted),
     )
-    return OutcomeFindings(
-        form="person-time",
-        counts=Gap("not-counts"),
-        given=rates,
-        totals=totals,
-        marks=marks,
-        measures={key: Gap(withheld[key]) if key in withheld else _measure(figures[key]) for key in RATE_MEASURES},
-        test=probability,
-        conversion=nothing,
-        patient=nothing,
-        cautions=cautions_for(case),
-        extras=extras,
+    measures: dict[str, Measure] = {
+        key: Gap(withheld[key]) if key in withheld else given_or_why(figures[key]) for key in RATE_MEASURES
+    }
+    return whole(case, measures, totals)
+
+
+def _extras(outcome: Outcome, ratio: Figure | None, clusters: ReadClusters, adjusted: ReadEffect) -> Extras:
+    """The E-value of the rate ratio outside trials, and a cohort's attributable fraction."""
+    observational = ratio is not None and outcome.design in OBSERVATIONAL
+    return Extras(
+        e_value=e_values(ratio, "rate_ratio", common=False) if ratio and observational else None,
+        attributable_exposed=of_exposed(ratio) if ratio and outcome.design == "cohort" else None,
+        clusters=clusters.clusters,
+        adjusted=adjusted.figure,
     )
 
 
@@ -122,12 +115,6 @@ def _figures(rates: Rates, choices: Choices, pace: Pace, clusters: ReadClusters)
         "rate_difference": figure("rate_difference", family.difference, stats.rate_difference(rates), rates),
         "rate_ratio": figure("rate_ratio", family.ratio, stats.rate_ratio(rates), rates),
     }
-
-
-def _measure(figure: Figure) -> Figure | Gap:
-    if isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap):
-        return figure.estimate
-    return figure
 
 
 def _test(rates: Rates, choices: Choices, pace: Pace, clusters: ReadClusters) -> Probability:

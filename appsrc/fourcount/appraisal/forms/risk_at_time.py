@@ -3,13 +3,11 @@
 from __future__ import annotations
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.cautions import cautions_for
 from fourcount.appraisal.extras.attributable import of_exposed
 from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
-from fourcount.appraisal.extras.printed import PRINTED, adjusted_of
+from fourcount.appraisal.extras.printed import PRINTED, ReadEffect, adjusted_of
 from fourcount.appraisal.findings import (
     TIMED_MEASURES,
-    AnyNumberNeeded,
     Extras,
     Figure,
     Gap,
@@ -18,6 +16,7 @@ from fourcount.appraisal.findings import (
     TimedRisks,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
+from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import withheld_of_timed
 from fourcount.appraisal.measures import number_needed_from
 from fourcount.appraisal.postponing import Pace
@@ -31,8 +30,6 @@ from fourcount.stats.results import LimitedRisk
 
 SQUARE_AND_ADD = "square-and-add"
 
-Measure = Figure | AnyNumberNeeded | Gap
-
 
 def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:  # noqa: ARG001 - one way in
     """The printed risks, their difference, number needed and ratio, at the level at which the limits are printed."""
@@ -41,49 +38,44 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     adjusted = adjusted_of(outcome)
     marks = reading.marks + adjusted.marks
     index, reference = _oriented(reading, outcome)
-    lacking = Gap("unreadable") if any(not mark.used for mark in reading.marks) else None
-    if lacking is None and (index.risk is None or reference.risk is None):
-        lacking = Gap("not-typed")
+    lacking = _lacking(reading, index, reference)
     if lacking is not None:
         return nothing_yet(lacking, form="risk-at-time", measures=TIMED_MEASURES, marks=marks)
     withheld = withheld_of_timed(outcome.design)
     timed = _timed(index, reference, reading.level)
     figures = {key: figure for key, figure in _figures(index, reference, timed).items() if key not in withheld}
     nothing = Gap(withheld.get("risk_ratio", "carried-later"))
-    test = Gap(withheld.get("risk_ratio", "not-counts"))
-    ratio = figures.get("risk_ratio")
-    extras = Extras(
-        e_value=e_values(ratio, "risk_ratio", common=False) if ratio and outcome.design in OBSERVATIONAL else None,
-        attributable_exposed=of_exposed(ratio) if ratio and outcome.design == "cohort" else None,
-        adjusted=adjusted.figure,
-    )
     case = Case(
         outcome=outcome,
         form="risk-at-time",
         given=timed,
         choices=choices,
         figures=figures,
-        test=test,
+        test=Gap(withheld.get("risk_ratio", "not-counts")),
         conversion=nothing,
         patient=nothing,
         marks=marks,
-        extras=extras,
+        extras=_extras(outcome, figures.get("risk_ratio"), adjusted),
     )
     measures: dict[str, Measure] = {}
     for key in TIMED_MEASURES:
         measures[key] = Gap(withheld[key]) if key in withheld else _measure(key, figures, welcome=outcome.welcome)
-    return OutcomeFindings(
-        form="risk-at-time",
-        counts=timed if isinstance(timed, Gap) else Gap("not-counts"),
-        given=timed,
-        totals=nothing_yet(nothing, form="risk-at-time", measures=()).totals,
-        marks=marks,
-        measures=measures,
-        test=test,
-        conversion=nothing,
-        patient=nothing,
-        cautions=cautions_for(case),
-        extras=extras,
+    return whole(case, measures)
+
+
+def _lacking(reading: RiskAtTimeReading, index: PrintedRisk, reference: PrintedRisk) -> Gap | None:
+    if any(not mark.used for mark in reading.marks):
+        return Gap("unreadable")
+    return Gap("not-typed") if index.risk is None or reference.risk is None else None
+
+
+def _extras(outcome: Outcome, ratio: Figure | None, adjusted: ReadEffect) -> Extras:
+    """The E-value of the ratio outside trials, and a cohort's attributable fraction."""
+    observational = outcome.design in OBSERVATIONAL
+    return Extras(
+        e_value=e_values(ratio, "risk_ratio", common=False) if ratio and observational else None,
+        attributable_exposed=of_exposed(ratio) if ratio and outcome.design == "cohort" else None,
+        adjusted=adjusted.figure,
     )
 
 
@@ -153,7 +145,4 @@ def _interval(measure: str, timed: TimedRisks | Gap) -> Interval | Gap:
 def _measure(key: str, figures: dict[str, Figure], *, welcome: bool) -> Measure:
     if key == "number_needed":
         return number_needed_from(figures["risk_difference"], welcome=welcome)
-    figure = figures[key]
-    if isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap):
-        return figure.estimate
-    return figure
+    return given_or_why(figures[key])

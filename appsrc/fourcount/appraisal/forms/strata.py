@@ -5,7 +5,6 @@ from __future__ import annotations
 from dataclasses import replace
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.cautions import cautions_for
 from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.conversion import converted_figure
 from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
@@ -13,9 +12,9 @@ from fourcount.appraisal.extras.of_counts import outcome_is_common
 from fourcount.appraisal.extras.printed import adjusted_of
 from fourcount.appraisal.findings import (
     MEASURES,
-    AnyNumberNeeded,
     Conversion,
     Counts,
+    EValues,
     Extras,
     Figure,
     Gap,
@@ -25,6 +24,7 @@ from fourcount.appraisal.findings import (
     StratumFindings,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
+from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import Support, support_of
 from fourcount.appraisal.measures import Table, all_figures, measures, own_test
 from fourcount.appraisal.patient import carry_effect
@@ -40,8 +40,6 @@ from fourcount.record.paper import Choices
 WITHIN = ("risk_index", "risk_reference", "risk_difference", "risk_ratio", "odds_ratio")
 """The measures of a single stratum."""
 
-Measure = Figure | AnyNumberNeeded | Gap
-
 
 def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
     """Crude measures of all strata together beside the pooled ones; blank rows are left out."""
@@ -49,62 +47,54 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     typed, clusters, adjusted = typed_risk(outcome), clusters_of(outcome), adjusted_of(outcome)
     marks = tuple(mark for reading in readings for mark in reading.marks)
     marks += marks_of(typed) + clusters.marks + adjusted.marks
-    used = [(place, reading) for place, reading in enumerate(readings) if not reading.blank]
-    found = [_counts(reading, outcome) for _, reading in used]
-    totals = totals_of(_summed([reading for _, reading in used]))
-    gap = next((one for one in found if isinstance(one, Gap)), None if found else Gap("not-typed"))
-    if gap is not None:
-        worst = Gap("unreadable") if Gap("unreadable") in found else gap
-        return nothing_yet(worst, form="strata", measures=MEASURES, totals=totals, marks=marks)
-    strata = tuple(one for one in found if isinstance(one, Counts))
+    used = [reading for reading in readings if not reading.blank]
+    labels = [reading.label or str(place + 1) for place, reading in enumerate(readings) if not reading.blank]
+    totals = totals_of(_summed(used))
+    strata = _all_counts(used, outcome)
+    if isinstance(strata, Gap):
+        return nothing_yet(strata, form="strata", measures=MEASURES, totals=totals, marks=marks)
     counts, support = _together(strata), support_of(outcome)
     later = postponed(counts, choices, pace.loaded) if pace.deferring else NOTHING
     table = Table(counts=counts, choices=choices, postponed=later, behind=clusters.elsewhere)
     crude = all_figures(table, support)
-    labels = [reading.label or str(place + 1) for place, reading in used]
     parts = _strata(strata, labels, table, crude, support)
     pooled = {} if isinstance(parts, Gap) else _given(parts)
     conversion, patient = _for_a_patient(pooled, outcome, support, typed)
-    test = Gap(support.refused) if support.refused else own_test(table)
-    measure = "odds_ratio" if outcome.design == "case-control" else "risk_ratio"
-    extras = Extras(
-        e_value=e_values(pooled[f"pooled_{measure}"], measure, common=outcome_is_common(outcome, counts))
-        if outcome.design in OBSERVATIONAL and f"pooled_{measure}" in pooled
-        else None,
-        clusters=clusters.clusters,
-        adjusted=adjusted.figure,
-    )
     case = Case(
         outcome=outcome,
         form="strata",
         given=counts,
         choices=choices,
         figures={**crude, **pooled},
-        test=test,
+        test=Gap(support.refused) if support.refused else own_test(table),
         conversion=conversion,
         patient=patient,
         marks=marks,
-        extras=extras,
-        strata=None if isinstance(parts, Gap) else parts,
-    )
-    return OutcomeFindings(
-        form="strata",
-        counts=counts,
-        given=counts,
-        totals=totals,
-        marks=marks,
-        measures=measures(crude, support, welcome=outcome.welcome),
-        test=test,
-        conversion=conversion,
-        patient=patient,
-        cautions=cautions_for(case),
+        extras=Extras(e_value=_e_value(pooled, outcome, counts), clusters=clusters.clusters, adjusted=adjusted.figure),
         strata=parts,
-        extras=extras,
     )
+    return whole(case, measures(crude, support, welcome=outcome.welcome), totals)
 
 
-def _counts(reading: StratumReading, outcome: Outcome) -> Counts | Gap:
-    return oriented(TableReading(first=reading.first, second=reading.second, marks=reading.marks), outcome)
+def _e_value(pooled: dict[str, Figure], outcome: Outcome, counts: Counts) -> EValues | Gap | None:
+    """Of the pooled ratio that the design gives, outside trials: the strata have dealt with what they are strata of."""
+    measure = "odds_ratio" if outcome.design == "case-control" else "risk_ratio"
+    ratio = pooled.get(f"pooled_{measure}")
+    if ratio is None or outcome.design not in OBSERVATIONAL:
+        return None
+    return e_values(ratio, measure, common=outcome_is_common(outcome, counts))
+
+
+def _all_counts(readings: list[StratumReading], outcome: Outcome) -> tuple[Counts, ...] | Gap:
+    """The counts of every row; one that cannot be read outweighs one that is not whole yet."""
+    found = [
+        oriented(TableReading(first=reading.first, second=reading.second, marks=reading.marks), outcome)
+        for reading in readings
+    ]
+    gaps = [one for one in found if isinstance(one, Gap)]
+    if gaps or not found:
+        return Gap("unreadable") if Gap("unreadable") in gaps else Gap("not-typed")
+    return tuple(one for one in found if isinstance(one, Counts))
 
 
 def _together(strata: tuple[Counts, ...]) -> Counts:
@@ -154,12 +144,7 @@ def _within(table: Table, support: Support) -> dict[str, Measure]:
     found: dict[str, Measure] = {}
     for key in WITHIN:
         figure = figures.get(key)
-        if figure is None:
-            found[key] = Gap(support.withheld[key])
-        elif isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap):
-            found[key] = figure.estimate
-        else:
-            found[key] = figure
+        found[key] = Gap(support.withheld[key]) if figure is None else given_or_why(figure)
     return found
 
 

@@ -1,0 +1,36 @@
+"""The findings of a table that says something."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+
+from fourcount.appraisal.case import Case
+from fourcount.appraisal.cautions import cautions_for
+from fourcount.appraisal.findings import AnyNumberNeeded, Counts, Figure, Gap, OutcomeFindings, Totals
+
+Measure = Figure | AnyNumberNeeded | Gap
+
+
+def whole(case: Case, measures: Mapping[str, Measure], totals: Totals | None = None) -> OutcomeFindings:
+    """What the case holds, with its cautions; ``counts`` is what it gives, where that is four counts."""
+    return OutcomeFindings(
+        form=case.form,
+        counts=case.given if isinstance(case.given, Counts) else Gap("not-counts"),
+        given=case.given,
+        totals=totals or Totals(),
+        marks=case.marks,
+        measures=dict(measures),
+        test=case.test,
+        conversion=case.conversion,
+        patient=case.patient,
+        cautions=cautions_for(case),
+        strata=case.strata,
+        extras=case.extras,
+    )
+
+
+def given_or_why(figure: Figure) -> Figure | Gap:
+    """The figure; where neither estimate nor interval is given, the reason for the estimate."""
+    if isinstance(figure.estimate, Gap) and isinstance(figure.interval, Gap):
+        return figure.estimate
+    return figure
