@@ -33,6 +33,9 @@ class Rule:
 TABLES: tuple[Form, ...] = (*COUNTED_FORMS, "strata")
 """The forms that give four counts."""
 
+WITH_RISKS: tuple[Form, ...] = (*TABLES, "risk-at-time")
+"""The forms that give a risk of the reference group."""
+
 WITHOUT_CLUSTERS: tuple[Form, ...] = ("strata", "pairs", "person-time")
 """The forms whose intervals are not corrected for clusters."""
 
@@ -157,7 +160,7 @@ CAUTIONS: tuple[Rule, ...] = (
     Rule(
         key="effect-kept-constant",
         holds=rules.effect_kept_constant,
-        forms=TABLES,
+        forms=WITH_RISKS,
         source="Cochrane Handbook 5.1, 12.5.3; Kent 2018",
     ),
     Rule(
@@ -169,7 +172,7 @@ CAUTIONS: tuple[Rule, ...] = (
     Rule(
         key="baseline-far",
         holds=rules.baseline_far,
-        forms=TABLES,
+        forms=WITH_RISKS,
         source="Kent 2018 and PATH 2020 (an average effect hides variation with risk); half to twice: common practice",
     ),
     Rule(key="baseline-uncertain", holds=rules.baseline_uncertain, source="Cochrane Handbook 5.1, 12.5.4.5"),

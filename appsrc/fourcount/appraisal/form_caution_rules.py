@@ -137,11 +137,11 @@ def interval_rebuilt(case: Case) -> Facts | None:
 
 
 def printed_level(case: Case) -> Facts | None:
-    """Printed limits keep their own level, which is not the record's."""
-    given, rebuilt = case.given, interval_rebuilt(case) is not None
+    """Printed limits, and those rebuilt from a printed p, have a level of their own, which is not the record's."""
+    given = case.given
     if isinstance(given, TimedRisks):
         level = given.level
-    elif isinstance(given, PrintedFigure) and given.low is not None and given.high is not None and not rebuilt:
+    elif isinstance(given, PrintedFigure) and isinstance(case.extras.recovered, Recovered):
         level = given.level or USUAL_LEVEL
     else:
         return None

@@ -8,17 +8,18 @@ import pytest
 
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import TIMED_MEASURES, Gap, Interval, NumberNeeded, TimedRisks
-from fourcount.record.outcome import CELLS, Outcome, RiskAtTime
+from fourcount.record.outcome import CELLS, Outcome, Patient, RiskAtTime
 from fourcount.record.paper import Choices
 from fourcount.stats.results import LimitedRisk
 
 TEXTS = ("9%", "6 to 12", "17%", "13 to 21")
 
 
-def found(*texts, level="", chosen=0.95, **rest):
-    """The findings of four texts, and of the level at which their limits are printed."""
+def found(*texts, level="", chosen=0.95, baseline="", **rest):
+    """The findings of four texts, of the level at which their limits are printed, and at a starting risk."""
     table = RiskAtTime(**dict(zip(CELLS, texts or TEXTS, strict=True)), limits_level_text=level)
-    return appraise(Outcome(table=table, **rest), Choices(level=chosen))
+    outcome = Outcome(table=table, patient=Patient(starting_risk_text=baseline, effect="odds_ratio"), **rest)
+    return appraise(outcome, Choices(level=chosen))
 
 
 def withheld(findings):
@@ -92,3 +93,27 @@ def test_what_cannot_be_read_is_marked():
     assert [mark.key for mark in found("9%", "12 to 6", "17%", "13 to 21").marks] == ["limits-disordered"]
     assert [mark.key for mark in found("0.09", "", "17%", "").marks] == ["percent-or-fraction"]
     assert Gap("not-typed") == found("9%", "6 to 12", "", "").given
+
+
+def test_a_patient_takes_the_printed_risks_or_their_ratio():
+    """At the reference group's own risk the printed limits stand; at another one the ratio is carried, never odds."""
+    own = found().patient
+    assert (own.without.interval, own.with_.interval) == (Interval(low=0.13, high=0.21), Interval(low=0.06, high=0.12))
+    assert own.difference == found().measures["risk_difference"]
+    assert own.number_needed == found().measures["number_needed"]
+    assert (own.effect, own.range_from, own.baseline_from) == ("risk_ratio", "table", "reference")
+    carried = found(baseline="34%")
+    assert carried.patient.with_.estimate == pytest.approx(0.18)
+    assert carried.patient.range_from == "effect"
+    assert "effect-kept-constant" in {caution.key for caution in carried.cautions}
+    assert "baseline-far" in {caution.key for caution in found(baseline="35%").cautions}
+    assert Gap("baseline-unreadable") == found(baseline="often").patient
+    assert Gap("design-survey-nnt") == found(baseline="20%", design="survey").patient.number_needed
+
+
+def test_a_cohorts_ratio_has_an_e_value():
+    """As a ratio of counts has."""
+    values = found("17%", "13 to 21", "9%", "6 to 12", design="cohort").extras
+    assert values.e_value.measure == "risk_ratio"
+    assert values.attributable_exposed.estimate == pytest.approx(8 / 17)
+    assert found().extras.e_value is None

@@ -45,7 +45,7 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     """The printed effect as it stands, its standard error and p, and what it says at a typed starting risk.
 
     Its limits stay those of the print, whatever level the record has. Where only a p is printed, they are rebuilt
-    from it at the record's level, which is approximate.
+    from it at the usual level, which is approximate.
     """
     read, typed = read_effect(outcome.paper_text, outcome.paper_measure, "paper_text"), typed_risk(outcome)
     marks = read.marks + marks_of(typed)
@@ -55,7 +55,7 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         return nothing_yet(printed, form="effect-only", measures=(outcome.paper_measure,), marks=marks)
     if isinstance(figure, Gap):
         return nothing_yet(figure, form="effect-only", measures=(printed.measure,), marks=marks, given=printed)
-    figure, recovered = _with_interval(figure, printed, choices)
+    figure, recovered = _with_interval(figure, printed)
     start = _start(typed)
     p = recovered if isinstance(recovered, Gap) else recovered.p
     figures: dict[str, Figure] = {printed.measure: figure}
@@ -118,14 +118,13 @@ def _reciprocal(value: float) -> float:
     return math.inf if value == 0 else 1.0 / value
 
 
-def _with_interval(figure: Figure, printed: PrintedFigure, choices: Choices) -> tuple[Figure, Recovered | Gap]:
+def _with_interval(figure: Figure, printed: PrintedFigure) -> tuple[Figure, Recovered | Gap]:
     """The figure with the limits of the print, or those that its p gives; and what both give for its standard error."""
     log_scale = printed.measure not in DIFFERENCES
     estimate = figure.estimate
     if isinstance(estimate, Gap):
         return figure, estimate
-    rebuilt = isinstance(figure.interval, Gap)
-    level = choices.level if rebuilt else printed.level or USUAL_LEVEL
+    rebuilt, level = isinstance(figure.interval, Gap), printed.level or USUAL_LEVEL
     if rebuilt and printed.p is not None and printed.p_relation == "=":
         interval = from_p(estimate, printed.p.value, level, log_scale)
         figure = Figure(estimate=estimate, interval=interval, method=PRINTED)

@@ -13,13 +13,16 @@ from fourcount.appraisal.findings import (
     Gap,
     Interval,
     OutcomeFindings,
+    PatientFindings,
     TimedRisks,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
-from fourcount.appraisal.gating import withheld_of_timed
+from fourcount.appraisal.gating import SUPPORT, withheld_of_timed
 from fourcount.appraisal.measures import number_needed_from
+from fourcount.appraisal.patient import carry
 from fourcount.appraisal.postponing import Pace
+from fourcount.appraisal.starting_risk import Typed, marks_of, starting_risk, typed_risk
 from fourcount.record.entry.readings import PrintedRisk, RiskAtTimeReading
 from fourcount.record.entry.risk_at_time import USUAL_LEVEL, read_risk_at_time
 from fourcount.record.outcome import Outcome, RiskAtTime
@@ -35,8 +38,8 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     """The printed risks, their difference, number needed and ratio, at the level at which the limits are printed."""
     table = outcome.table
     reading = read_risk_at_time(table) if isinstance(table, RiskAtTime) else _BLANK
-    adjusted = adjusted_of(outcome)
-    marks = reading.marks + adjusted.marks
+    adjusted, typed = adjusted_of(outcome), typed_risk(outcome)
+    marks = reading.marks + marks_of(typed) + adjusted.marks
     index, reference = _oriented(reading, outcome)
     lacking = _lacking(reading, index, reference)
     if lacking is not None:
@@ -44,16 +47,16 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     withheld = withheld_of_timed(outcome.design)
     timed = _timed(index, reference, reading.level)
     figures = {key: figure for key, figure in _figures(index, reference, timed).items() if key not in withheld}
-    nothing = Gap(withheld.get("risk_ratio", "carried-later"))
+    nothing = Gap(withheld.get("risk_ratio", "not-counts"))
     case = Case(
         outcome=outcome,
         form="risk-at-time",
         given=timed,
         choices=choices,
         figures=figures,
-        test=Gap(withheld.get("risk_ratio", "not-counts")),
+        test=nothing,
         conversion=nothing,
-        patient=nothing,
+        patient=_patient(typed, figures, outcome) if "risk_ratio" in figures else nothing,
         marks=marks,
         extras=_extras(outcome, figures.get("risk_ratio"), adjusted),
     )
@@ -67,6 +70,15 @@ def _lacking(reading: RiskAtTimeReading, index: PrintedRisk, reference: PrintedR
     if any(not mark.used for mark in reading.marks):
         return Gap("unreadable")
     return Gap("not-typed") if index.risk is None or reference.risk is None else None
+
+
+def _patient(typed: Typed, figures: dict[str, Figure], outcome: Outcome) -> PatientFindings | Gap:
+    """The printed risks themselves, or their ratio at a typed starting risk, at the level of the printed limits."""
+    support = SUPPORT[outcome.design]
+    start = starting_risk(typed, figures["risk_reference"].estimate, support)
+    if isinstance(start, Gap):
+        return start
+    return carry(figures, start, "risk_ratio", support, welcome=outcome.welcome)
 
 
 def _extras(outcome: Outcome, ratio: Figure | None, adjusted: ReadEffect) -> Extras:
