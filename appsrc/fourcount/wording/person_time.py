@@ -26,8 +26,11 @@ def per_units(rates: Rates) -> int:
 
     Rates are told as whole as that, so that both read without leading zeros; where nobody had an event, as if one had.
     """
-    found = (rates.index_events / rates.index_time, rates.reference_events / rates.reference_time)
-    least = min((x for x in found if x > 0), default=1 / max(rates.index_time, rates.reference_time))
+    groups = ((rates.index_events, rates.index_time), (rates.reference_events, rates.reference_time))
+    timed = [(events, time) for events, time in groups if time > 0]
+    if not timed:
+        return 1
+    least = min((events / time for events, time in timed if events), default=1 / max(time for _, time in timed))
     return next((power for power in POWERS if least * power >= 1), POWERS[-1])
 
 

@@ -34,7 +34,7 @@ def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
         return _rates(outcome, findings, shown)
     if findings.form == "pairs":
         return _pairs(outcome, findings, shown)
-    if outcome.design == "case-control":
+    if outcome.design == "case-control" and "odds_ratio" in findings.measures:
         return _odds(outcome, findings, shown)
     figures = _three(UNPAIRED_KEYS, findings)
     return gap_text(figures) if isinstance(figures, Gap) else people_headline(outcome, figures, shown)

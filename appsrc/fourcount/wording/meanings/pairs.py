@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, OutcomeFindings, PairCounts
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PairCounts
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
-from fourcount.wording.form import given
+from fourcount.wording.form import given, measure_of
 from fourcount.wording.meanings.parts import (
     estimate_of,
     given_estimate,
@@ -38,15 +38,23 @@ def ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: 
     """How many times one side's risk the other's is, and between which two."""
     estimate = given_estimate(figure)
     relative = limits.relative(estimate, " of ")
-    risks = " and ".join(
-        f"{numbers.percent(estimate_of(f'pair_risk_{group}', findings))} {names.in_group(outcome, group)}"
-        for group in ("reference", "index")
-    )
     return (
         f"{times('risk', outcome, numbers.ratio(estimate))}{with_interval('pair_ratio', figure, choices)}"
         f"{f': a {relative}' if relative else ''}. "
-        f"By itself it does not say how large the risk is: it was {risks}.{no_interval(figure)}"
+        f"By itself it does not say how large the risk is{_both_risks(outcome, findings)}.{no_interval(figure)}"
     )
+
+
+def _both_risks(outcome: Outcome, findings: OutcomeFindings) -> str:
+    """``: it was 35.0% with usual care and 25.0% with night lights``; "" where pairs without the event are unknown."""
+    groups: tuple[names.Group, names.Group] = ("reference", "index")
+    if any(isinstance(measure_of(f"pair_risk_{group}", findings), Gap) for group in groups):
+        return ""
+    risks = (
+        f"{numbers.percent(estimate_of(f'pair_risk_{group}', findings))} {names.in_group(outcome, group)}"
+        for group in groups
+    )
+    return f": it was {' and '.join(risks)}"
 
 
 def risk_reference(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
