@@ -2,36 +2,19 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable, Mapping
+from collections.abc import Callable
 from functools import lru_cache
-from types import MappingProxyType
 
 from fourcount.appraisal.findings import OutcomeFindings
-from fourcount.appraisal.forms.effect_only import appraise_effect
 from fourcount.appraisal.forms.four_counts import appraise_counts
-from fourcount.appraisal.forms.pairs import appraise_pairs
-from fourcount.appraisal.forms.person_time import appraise_rates
-from fourcount.appraisal.forms.risk_at_time import appraise_timed
-from fourcount.appraisal.forms.strata import appraise_strata
 from fourcount.appraisal.postponing import AT_LEISURE, Pace, may_wait, numbers_loaded
-from fourcount.record.outcome import Form, Outcome, form_of
+from fourcount.record.outcome import COUNTED_FORMS, Form, Outcome, form_of
 from fourcount.record.paper import Choices
 
 REMEMBERED = 512
 """How many answers are kept: more than the outcomes of the largest record, and some of its past."""
 
-_BY_FORM: Mapping[Form, Callable[[Outcome, Choices, Pace], OutcomeFindings]] = MappingProxyType(
-    {
-        "events-and-others": appraise_counts,
-        "events-of-total": appraise_counts,
-        "percent-of-total": appraise_counts,
-        "effect-only": appraise_effect,
-        "pairs": appraise_pairs,
-        "person-time": appraise_rates,
-        "risk-at-time": appraise_timed,
-        "strata": appraise_strata,
-    }
-)
+WayIn = Callable[[Outcome, Choices, Pace], OutcomeFindings]
 
 
 def appraise(outcome: Outcome, choices: Choices, deferring: bool = False) -> OutcomeFindings:
@@ -47,4 +30,29 @@ def appraise(outcome: Outcome, choices: Choices, deferring: bool = False) -> Out
 
 @lru_cache(maxsize=REMEMBERED)
 def _appraise(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
-    return _BY_FORM[form_of(outcome.table)](outcome, choices, pace)
+    form = form_of(outcome.table)
+    way_in = appraise_counts if form in COUNTED_FORMS else _other_form(form)
+    return way_in(outcome, choices, pace)
+
+
+def _other_form(form: Form) -> WayIn:
+    """The way in of a form that is not four counts, loaded with its first use: the window starts without."""
+    if form == "effect-only":
+        from fourcount.appraisal.forms.effect_only import appraise_effect
+
+        return appraise_effect
+    if form == "pairs":
+        from fourcount.appraisal.forms.pairs import appraise_pairs
+
+        return appraise_pairs
+    if form == "person-time":
+        from fourcount.appraisal.forms.person_time import appraise_rates
+
+        return appraise_rates
+    if form == "risk-at-time":
+        from fourcount.appraisal.forms.risk_at_time import appraise_timed
+
+        return appraise_timed
+    from fourcount.appraisal.forms.strata import appraise_strata
+
+    return appraise_strata

@@ -5,7 +5,6 @@ from __future__ import annotations
 import msgspec
 
 from fourcount.appraisal.findings import EFFECT_MEASURES, Figure, Gap, Interval, Mark, PrintedFigure
-from fourcount.record.entry.printed import read_paper
 from fourcount.record.outcome import Outcome, PaperMeasure
 
 PRINTED = "printed"
@@ -38,6 +37,8 @@ def read_effect(text: str, measure: PaperMeasure, field: str) -> ReadEffect:
     """The first effect in a text, one of the measure first; risks, p alone and the like are passed over."""
     if not text.strip():
         return ReadEffect(effect=Gap("effect-not-typed"))
+    from fourcount.record.entry.printed import read_paper  # most tables have no such text, and start without its reader
+
     reading = read_paper(text, measure, field)
     effects = [
         figure for figure in reading.figures if figure.measure in EFFECT_MEASURES and figure.estimate is not None
