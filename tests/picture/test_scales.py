@@ -14,6 +14,8 @@ from fourcount.picture.scales import (
     RISK_ENDS,
     Scale,
     difference_scale,
+    rate_difference_scale,
+    rate_scale,
     ratio_scale,
     risk_scale,
 )
@@ -118,3 +120,41 @@ def test_a_ratio_beyond_the_scale_falls_outside(value: float, place: str) -> Non
     """0, infinity and extreme ratios are said to lie off the strip's ends, never moved onto it."""
     at = ratio_scale([value]).place(value)
     assert at < 0 if place == "before" else at > 1
+
+
+@pytest.mark.parametrize(
+    ("values", "high"),
+    [
+        ([], 1.0),
+        ([0.0], 1.0),
+        ([9.2, 17.1, 21.6], 25.0),
+        ([1.0], 1.0),
+        ([1.01], 1.5),
+        ([0.0031], 0.005),
+        ([8400.0], 10_000.0),
+        ([math.inf, 3.0], 5.0),
+    ],
+)
+def test_a_rate_scale_runs_from_0_to_the_least_round_rate(values: list[float], high: float) -> None:
+    """Whatever the unit in which rates are shown."""
+    scale = rate_scale(values)
+    assert (scale.low, scale.no_effect) == (0.0, None)
+    assert scale.high == pytest.approx(high)
+
+
+@pytest.mark.parametrize(
+    ("values", "end"), [([], 1.0), ([-7.9, -13.1, -3.0], 15.0), ([0.2, -0.12], 0.25), ([-40.0], 50.0)]
+)
+def test_a_scale_of_rate_differences_has_no_difference_in_its_middle(values: list[float], end: float) -> None:
+    """Fewer and more get the same room."""
+    scale = rate_difference_scale(values)
+    assert (scale.low, scale.no_effect) == (-scale.high, 0.0)
+    assert scale.high == pytest.approx(end)
+
+
+@given(st.lists(st.floats(0, 1e9), min_size=1, max_size=6))
+def test_a_rate_scale_holds_what_it_shows(values: list[float]) -> None:
+    """Nothing runs off its end, and at least a tenth of it is used."""
+    scale = rate_scale(values)
+    assert all(0 <= scale.place(value) <= 1 + 1e-9 for value in values)
+    assert max(values) == 0 or max(values) < 1e-300 or scale.place(max(values)) >= 0.1 - 1e-9
