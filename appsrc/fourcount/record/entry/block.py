@@ -39,7 +39,7 @@ def read_block(text: str) -> Pasted | None:
     if found is None:
         return None
     doubts = dict.fromkeys((*found.ambiguous, *(("comma-pairs",) if grid.comma_pairs else ())))
-    pieces = [" ".join(piece.split()) for piece in matrix.results]
+    pieces = [" ".join(piece.split()) for piece in (*matrix.results, *grid.results)]
     paper = "; ".join(pieces)
     figures = tuple(figure for piece in pieces for figure in read_paper(piece, _usual(piece)).figures)
     return msgspec.structs.replace(
@@ -121,8 +121,9 @@ def _table(found: Understood, doubts: Sequence[str], layout: Layout) -> Pasted:
 
 def _heading(text: str) -> str:
     """A heading without what only says how its cells are printed."""
-    for ending in ("n (%)", "no. (%)", "No. (%)", "N (%)", "n/N (%)", "n/N", "(%)", "(n)", "(n/N)"):
-        text = text.removesuffix(ending).rstrip(" ,-:\u2013\u2014")
+    for ending in ("n/N (%)", "(n/N)", "n (%)", "no. (%)", "No. (%)", "N (%)", "n/N", "(%)", "(n)"):
+        if text.endswith(ending):
+            return text.removesuffix(ending).rstrip(" ,-:\u2013\u2014")
     return text
 
 
@@ -147,7 +148,7 @@ def _groups(found: Understood) -> tuple[PastedGroup, ...]:
             left += "%"
         elif quantity.percent is not None and not agrees(quantity, found):
             left += f" ({quantity.percent.text}%)"
-        groups.append(PastedGroup(left_text=left, right_text=_right(quantity, found, place), label=label))
+        groups.append(PastedGroup(left_text=left, right_text=_right(quantity, found, place), label=_heading(label)))
     return tuple(groups)
 
 

@@ -24,9 +24,9 @@ def read_paste(text: str) -> Pasted | None:
     """
     if len(text) > LONGEST_TEXT:
         return None
-    if not is_prose(text):
-        return read_block(text) or read_sentence(text)
-    return read_sentence(text)
+    if is_prose(text):
+        return read_sentence(text)
+    return read_block(text) or (None if "\t" in text.strip() else read_sentence(text))
 
 
 def is_prose(text: str) -> bool:
@@ -38,4 +38,5 @@ def is_prose(text: str) -> bool:
     if "\n" not in shown:
         return words >= 3 or ":" in shown
     lines = shown.split("\n")
-    return words > 2 * numbers and words > 6 * len(lines)
+    wrapped = any(line.strip()[:1].islower() or line.strip()[:1] == "(" for line in lines[1:])
+    return words > 2 * numbers and words > (3 if wrapped else 6) * len(lines)

@@ -13,7 +13,7 @@ from fourcount.record.entry.pasted.event_words import event_words, time_span
 from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
 from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity, gives
 from fourcount.record.entry.pasted.totals import shared_total, with_totals
-from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, INTRODUCERS, NOT_PEOPLE
+from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, INTRODUCERS, NOT_PEOPLE, PEOPLE
 from fourcount.record.entry.printed import named_figures
 from fourcount.record.entry.readings import Pasted, PastedGroup
 from fourcount.record.entry.tokens import LONGEST_TEXT, Print, Token, as_sentence, take_apart
@@ -24,6 +24,7 @@ __all__ = ["PASTE_DOUBTS", "read_sentence"]
 _MOST_TOKENS = 1500
 _MOST_NUMBERS = 200
 _MOST_PAIRS = 12
+_NEAR = 12
 _EFFECTS = ("risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference")
 _GROUP_WORDS = GROUP_NOUNS | {"groups", "arms", "placebo", "respectively", "control"}
 
@@ -75,17 +76,21 @@ class SentenceReader:
                 quantity = None
             place = quantity.after if quantity else place + 1
             if quantity and not self._of_something_else(quantity) and not self._joined(found, quantity):
-                found.append(quantity)
+                found.append(self._with_count_before(quantity, found[-1].after if found else 0))
         return found
 
     def _joined(self, found: list[Quantity], quantity: Quantity) -> bool:
         """Put a percentage that stands alone to the count that it is of, "38 of 412 on foam mattresses (9.2%)"."""
         percent = quantity.percent
+        if found and self._is_percent_of(found[-1], quantity):
+            ahead = found.pop()
+            found.append(msgspec.structs.replace(quantity, first=ahead.first, percent=ahead.percent))
+            return True
         if not found or percent is None or quantity.events or quantity.complete:
             return False
         last = found[-1]
         bracketed = self.tokens[quantity.first - 1].text in OPENING
-        if last.events is None or last.total is None or last.percent is not None or quantity.first - last.after > 12:
+        if last.events is None or last.total is None or last.percent is not None or quantity.first - last.after > _NEAR:
             return False
         if not (bracketed or gives(percent, last.events.whole or 0, last.total.whole or 0)):
             return False
@@ -102,9 +107,37 @@ class SentenceReader:
             return False
         return bool(NOT_PEOPLE & (before | near)) or {"blood", "pressure"} <= before
 
+    def _with_count_before(self, quantity: Quantity, start: int) -> Quantity:
+        """A percentage in brackets with its count, "66 participants with the ring (22%)"."""
+        alone = quantity.percent and not (quantity.events or quantity.complete)
+        if not alone or self.tokens[quantity.first - 1].text not in OPENING:
+            return quantity
+        for place in range(quantity.first - 2, max(start, quantity.first - _NEAR) - 1, -1):
+            token = self.tokens[place]
+            if token.kind == "mark" and token.text != "-":
+                break
+            if token.kind == "number":
+                following = self.tokens[place + 1].lower
+                counts = token.whole is not None and not token.percent and place not in self.busy
+                if counts and following in PEOPLE | {"in", "with", "on"}:
+                    return msgspec.structs.replace(quantity, first=place, events=token)
+                break
+        return quantity
+
+    def _is_percent_of(self, ahead: Quantity, quantity: Quantity) -> bool:
+        """Whether a percentage before a count is its own, "2.5% in the sock group (10/400)"."""
+        alone = ahead.percent and not (ahead.events or ahead.complete) and quantity.percent is None
+        if not alone or not (quantity.events and quantity.total) or quantity.first - ahead.after > _NEAR:
+            return False
+        whole = msgspec.structs.replace(quantity, percent=ahead.percent)
+        return self.tokens[quantity.first - 1].text in OPENING and _agrees(whole)
+
     def _pairs(self, quantities: Sequence[Quantity], *, bare: bool) -> Iterator[tuple[Quantity, Quantity]]:
         """Neighbours of one kind, complete ones first; not more of them than a reader would look at."""
-        fitting = [pair for pair in pairwise(quantities) if self._alike(*pair)]
+        counted = [each for each in quantities if each.events or each.complete]
+        percents = [each for each in quantities if not (each.events or each.low)]
+        neighbours = [*pairwise(counted), *(pair for pair in pairwise(percents) if pair[0].percent and pair[1].percent)]
+        fitting = [pair for pair in dict.fromkeys(neighbours) if self._alike(*pair)]
         if not bare:
             yield from [pair for pair in fitting if pair[0].complete and pair[1].complete][:_MOST_PAIRS]
         yield from [pair for pair in fitting if not (pair[0].complete and pair[1].complete)][:_MOST_PAIRS]
@@ -168,7 +201,7 @@ class SentenceReader:
         between = {token.lower for token in self.tokens[first.after : second.first]}
         around = {token.lower for token in self.tokens[bounds[0] : bounds[1]]}
         effect = any(figure.measure in _EFFECTS for figure in self.figures)
-        if COMPARATORS & between or _GROUP_WORDS & around or effect:
+        if COMPARATORS & between or _GROUP_WORDS & around or effect or (self.figures and all(labels)):
             return True
         if strictly or not all(labels):
             return False

@@ -10,6 +10,7 @@ from fourcount.record.entry.pasted.quantities import CLOSING, OPENING, Phrases, 
 from fourcount.record.entry.pasted.vocabulary import PEOPLE, time_of_people
 from fourcount.record.entry.tokens import Print, Token, as_sentence, take_apart
 
+_LEAST_TOTAL = 10
 _MOST_TOKENS = 150
 _BLANKS = frozenset(("-", "--", "---", "\u00b7", "...", "..", ".", "na", "n/a", "nr", "ns", "none", "reference", "ref"))
 _EVENT_NOUNS = frozenset(("events", "event", "deaths", "falls", "infections", "outcomes", "episodes", "with", "event"))
@@ -57,8 +58,10 @@ def delimited_cell(text: str) -> list[Cell]:
     if not tokens or text.casefold().strip() in _BLANKS or not any(_tells(token) for token in tokens):
         return [Cell(text=text)]
     numbers = sum(token.kind == "number" for token in tokens)
-    named = tokens[0].kind == "word" and (tokens[0].lower not in ("n", "p") or not numbers)
-    if not numbers or (named and not _value_behind_colon(tokens)):
+    compound = len(tokens) > 2 and tokens[1].text == "-" and tokens[2].kind == "word"
+    named = compound or (tokens[0].kind == "word" and (tokens[0].lower not in ("n", "p") or not numbers))
+    bound = tokens[0].text in ("<", ">") and any(token.value > 1 for token in tokens)
+    if bound or not numbers or (named and not _value_behind_colon(tokens)):
         return [_label(printed, 0, len(tokens))]
     if tokens[0].whole is not None and numbers == 1 and tokens[1:] and _counted_noun(tokens[1:]):
         return [Cell(text=text, quantity=Quantity(first=0, after=1, events=tokens[0]))]
@@ -90,7 +93,7 @@ def _cells(printed: Print) -> list[Cell]:
     tokens = printed.tokens
     phrases = Phrases(tokens, bare=True)
     whole = phrases.quantity_at(0) if tokens else None
-    start = 0 if whole and whole.complete else _body(tokens)
+    start = 0 if whole and whole.complete else min(_body(tokens), _first_whole(phrases))
     found = _labels(printed, start) if start else []
     place = start
     while place < len(tokens):
@@ -117,6 +120,15 @@ def _body(tokens: Sequence[Token]) -> int:
             break
         start += 1
     return _past_total(tokens, start)
+
+
+def _first_whole(phrases: Phrases) -> int:
+    """The place of the first whole group, "12 deaths in 400 patients", which no label holds."""
+    for place, token in enumerate(phrases.tokens):
+        quantity = phrases.quantity_at(place) if token.kind == "number" else None
+        if quantity and quantity.events and quantity.complete:
+            return place
+    return len(phrases.tokens)
 
 
 def _past_total(tokens: Sequence[Token], start: int) -> int:
@@ -172,7 +184,12 @@ def _people_in_brackets(tokens: Sequence[Token]) -> Token | None:
     """The number in "(412 residents)"."""
     for place in range(1, len(tokens) - 1):
         opened = tokens[place - 1].text in OPENING and tokens[place].whole is not None
-        if opened and tokens[place + 1].lower in PEOPLE:
+        closed = (
+            tokens[place + 1].text in CLOSING
+            and place + 2 == len(tokens)
+            and (tokens[place].whole or 0) >= _LEAST_TOTAL
+        )
+        if opened and (closed or tokens[place + 1].lower in PEOPLE):
             return tokens[place]
     return None
 
@@ -181,12 +198,10 @@ def _cell_at(printed: Print, phrases: Phrases, place: int) -> tuple[Cell | None,
     """The cell that begins at a token, and the place after it."""
     tokens = printed.tokens
     token = tokens[place]
-    if token.lower == "n" or (token.text in OPENING and phrases.at(place + 1).lower == "n"):
-        start = place if token.lower == "n" else place + 1
-        total = _total(tokens[start : start + 3])
-        if total:
-            after = start + 3
-            return Cell(text=printed.piece(place, after), total=total), after
+    start = place if token.lower == "n" else place + 1
+    total = _total(tokens[start : start + 3]) if token.lower == "n" or token.text in OPENING else None
+    if total:
+        return Cell(text=printed.piece(place, start + 3), total=total), start + 3
     if token.lower == "p" or token.text in ("<", ">"):
         return _p(printed, place)
     if token.kind != "number":
@@ -194,17 +209,25 @@ def _cell_at(printed: Print, phrases: Phrases, place: int) -> tuple[Cell | None,
     result = _result(printed, phrases, place)
     if result:
         return result
-    if token.whole is None and not token.percent:
-        return Cell(text=token.text, decimal=token), place + 1
     time = time_of_people(phrases.at(place + 1).lower, phrases.at(place + 2).lower)
+    if phrases.at(place + 1).lower == "per" and phrases.at(place + 2).kind == "number":
+        base = place + 3
+        return Cell(text=token.text), base + time_of_people(phrases.at(base).lower, phrases.at(base + 1).lower)
+    if token.whole is None and not token.percent and not time:
+        return Cell(text=token.text, decimal=token), place + 1
     quantity = phrases.quantity_at(place)
+    if time and not (quantity and quantity.complete):
+        return _timed(printed, place, time), place + 1 + time
     if quantity is None:
         return None, place + 1
-    if time and not quantity.complete:
-        unit = " ".join(each.text.rstrip(".") for each in tokens[place + 1 : place + 1 + time])
-        timed = Quantity(first=place, after=place + 1, events=token, unit=unit)
-        return Cell(text=token.text, quantity=timed), place + 1 + time
     return Cell(text=printed.piece(place, quantity.after), quantity=quantity), max(quantity.after, place + 1)
+
+
+def _timed(printed: Print, place: int, length: int) -> Cell:
+    """Person-time alone in a cell, with its unit."""
+    token = printed.tokens[place]
+    unit = " ".join(each.text.rstrip(".") for each in printed.tokens[place + 1 : place + 1 + length])
+    return Cell(text=token.text, quantity=Quantity(first=place, after=place + 1, events=token, unit=unit))
 
 
 def _p(printed: Print, place: int) -> tuple[Cell | None, int]:

@@ -32,6 +32,9 @@ def _is_result(matrix: Matrix, column: int) -> bool:
     filled = [row[column] for row in matrix.rows if row[column].filled]
     if not filled:
         return True
+    if column and not matrix.heads[column].label and all(cell.decimal and cell.decimal.value <= 1 for cell in filled):
+        beside = [row[column - 1] for row in matrix.rows if row[column - 1].filled]
+        return bool(beside) and all(cell.result for cell in beside)
     plain = any(cell.quantity and (cell.quantity.total or cell.count) for cell in filled)
     return all(cell.result for cell in filled) or (role in ("result", "p", "rate") and not (plain and role != "rate"))
 
@@ -48,7 +51,7 @@ def _texts(matrix: Matrix, columns: Sequence[int]) -> list[str]:
         cells = [row[column] for row in matrix.rows if row[column].filled]
         if role == "rate" or not cells:
             continue
-        found.append(named_result(head, role, cells[0]))
+        found.append(named_result(head, "p" if cells[0].decimal and not head else role, cells[0]))
     return found
 
 
@@ -73,17 +76,21 @@ def with_percentages(matrix: Matrix) -> Matrix:
         gone.append(column)
     kept = [place for place in range(len(matrix.heads)) if place not in gone]
     whole = msgspec.structs.replace(matrix, rows=tuple(tuple(row) for row in rows))
-    return msgspec.structs.replace(whole.only(range(len(rows)), kept), rows=_decimals_as_percents(rows, kept))
+    return msgspec.structs.replace(whole.only(range(len(rows)), kept), rows=_decimals_told(rows, kept, matrix.heads))
 
 
-def _decimals_as_percents(rows: Sequence[Sequence[Cell]], kept: Sequence[int]) -> tuple[tuple[Cell, ...], ...]:
-    """Numbers with decimals that stand alone as percentages, which is all that they can be beside totals."""
-    return tuple(tuple(_as_percent(row[column]) for column in kept) for row in rows)
+def _decimals_told(
+    rows: Sequence[Sequence[Cell]], kept: Sequence[int], heads: Sequence[Head]
+) -> tuple[tuple[Cell, ...], ...]:
+    """Numbers with decimals that stand alone as person-time under such a heading, else as percentages."""
+    return tuple(tuple(_told(row[column], heads[column]) for column in kept) for row in rows)
 
 
-def _as_percent(cell: Cell) -> Cell:
+def _told(cell: Cell, head: Head) -> Cell:
     if cell.quantity or cell.decimal is None:
         return cell
+    if role_of(head.label) == "time":
+        return msgspec.structs.replace(cell, quantity=Quantity(first=0, after=1, events=cell.decimal))
     return msgspec.structs.replace(cell, quantity=Quantity(first=0, after=1, percent=cell.decimal))
 
 

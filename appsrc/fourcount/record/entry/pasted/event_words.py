@@ -20,6 +20,7 @@ from fourcount.record.entry.tokens import Print
 _MOST_WORDS = 10
 _SAY_IT = frozenset(("healed", "resolved", "recurred", "failed", "persisted", "returned"))
 _CHANGED = frozenset(("fell", "dropped", "improved"))
+_TRAILING = frozenset(("in", "the", "at", "by", "within", "with", "after", "out", "of", "for", "a", "to"))
 _NO_EVENT = frozenset(("was", "were", "is", "are", "been", "had", "has", "have", "received", "of", "did"))
 
 
@@ -83,13 +84,17 @@ def _subject(printed: Print, start: int, after: int) -> str:
     if (
         len(lower) > 3
         and "of" in lower[:4]
-        and {"rate", "incidence", "proportion", "risk", "frequency"} & set(lower[:3])
+        and {"rate", "rates", "incidence", "proportion", "risk", "frequency"} & set(lower[:3])
     ):
         start += lower.index("of") + 1
     words = [token for token in tokens[start:after] if token.kind == "word"]
     while after > start and tokens[after - 1].lower in BE | {"also", "more", "less", "often", "frequently"}:
         after -= 1
-    plain = words and len(words) <= _MOST_WORDS and words[0].lower not in INTRODUCERS | DETERMINERS | {"there", "of"}
+    plain = (
+        words
+        and len(words) <= _MOST_WORDS
+        and words[0].lower not in INTRODUCERS | DETERMINERS | {"there", "of", "we", "they", "it", "this", "these"}
+    )
     if not plain or words[0].lower in PEOPLE | {"group", "overall"}:
         return ""
     return printed.piece(start, after)
@@ -127,7 +132,7 @@ def _behind(printed: Print, start: int, end: int) -> str:
                 ):
                     break
                 after += 1
-            while after > place + 1 and tokens[after - 1].lower in ("in", "the", "at", "by", "within", "with", "after"):
+            while after > place + 1 and tokens[after - 1].lower in _TRAILING:
                 after -= 1
             return printed.piece(place, after)
     return ""

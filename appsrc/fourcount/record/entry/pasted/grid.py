@@ -8,10 +8,12 @@ from collections.abc import Callable, Sequence
 import msgspec
 
 from fourcount.record.entry.pasted.cells import Cell, delimited_cell, row_cells
-from fourcount.record.entry.tokens import presentable
+from fourcount.record.entry.printed import named_figures
+from fourcount.record.entry.tokens import presentable, take_apart
 
 MOST_ROWS = 60
 MOST_COLUMNS = 24
+LONGEST_RESULT = 200
 _RULE = re.compile(r"[\s|+:=_-]*")
 _GAP = re.compile(r"[ \u00a0]{2,}| \| ?")
 _PAIR = re.compile(r"[0-9]{1,3},[0-9]{3}")
@@ -21,16 +23,21 @@ _COMMA_IN_NUMBER = re.compile(r"[0-9],[0-9]{3}(?![0-9])")
 
 
 class Grid(msgspec.Struct, frozen=True):
-    """Rows of cells, and whether a comma had to be taken as a border inside what might be one number."""
+    """Rows of cells, and lines of printed results; ``comma_pairs`` where a border may be a thousands mark."""
 
     rows: tuple[tuple[Cell, ...], ...]
     comma_pairs: bool = False
+    results: tuple[str, ...] = ()
 
 
 def read_grid(text: str) -> Grid | None:
     """The rows of a text; None where it has too many to be one table."""
-    lines = [line for line in presentable(text).split("\n") if not _RULE.fullmatch(line)]
-    if not lines or len(lines) > MOST_ROWS:
+    printed = [line for line in presentable(text).split("\n") if not _RULE.fullmatch(line)]
+    if not printed or len(printed) > MOST_ROWS:
+        return None
+    results = tuple(line.strip() for line in printed if _is_result(line))
+    lines = [line for line in printed if line.strip() not in results]
+    if not lines:
         return None
     split, comma_pairs = _splitter(lines)
     rows = []
@@ -40,7 +47,15 @@ def read_grid(text: str) -> Grid | None:
             return None
         cells = row_cells(line) if len(pieces) == 1 else [cell for piece in pieces for cell in delimited_cell(piece)]
         rows.append(tuple(cells[:MOST_COLUMNS]))
-    return Grid(tuple(rows), comma_pairs)
+    return Grid(tuple(rows), comma_pairs, results)
+
+
+def _is_result(line: str) -> bool:
+    """Whether a line without borders is a printed result from its first word on."""
+    if "\t" in line or "|" in line or _GAP.search(line.strip()):
+        return False
+    figures = named_figures(take_apart(line[:LONGEST_RESULT]), "risk_ratio")
+    return bool(figures) and figures[0][1][0] == 0 and figures[0][0].estimate is not None
 
 
 def _splitter(lines: Sequence[str]) -> tuple[Callable[[str], list[str]], bool]:

@@ -6,8 +6,9 @@ from collections.abc import Callable, Sequence
 
 import msgspec
 
+from fourcount.record.entry.pasted.heading_sets import by_case, corner_says, negated, roles_of
 from fourcount.record.entry.pasted.headings import Role, heading_words, is_sum, role_of
-from fourcount.record.entry.pasted.matrix import Head, Matrix
+from fourcount.record.entry.pasted.matrix import Matrix
 from fourcount.record.entry.pasted.quantities import Quantity, gives, nearly_gives
 from fourcount.record.entry.tokens import Token
 from fourcount.record.outcome import Form
@@ -34,13 +35,18 @@ def two_groups(matrix: Matrix) -> Understood | None:
     if len(matrix.rows) != 2:
         return None
     score = 0
-    roles = _roles(matrix.heads)
+    roles = roles_of(matrix.heads)
     labels = [role_of(label.label) for label in matrix.labels]
+    if negated(matrix.labels) and not any(head.label for head in matrix.heads):
+        labels = []
+    score -= 6 * any(role in ("time", "percent") for role in labels)
+    told = not negated(matrix.heads) or any(label.label for label in matrix.labels)
+    roles = roles if told else ["unknown"] * len(roles)
     score += 3 * any(role in _MEASURES for role in roles) - 3 * any(role in _MEASURES for role in labels)
     score += 3 * all(label.total for label in matrix.labels) + any(label.label for label in matrix.labels)
     score -= 3 * any(head.total for head in matrix.heads)
-    sampled = _by_case(matrix.heads)
-    score += 6 * sampled - 6 * _by_case(matrix.labels) + 2 * _corner(matrix.corner)
+    sampled = by_case(matrix.heads)
+    score += 6 * sampled - 6 * by_case(matrix.labels) + 2 * corner_says(matrix.corner)
     found = _complete(matrix) or _counted(matrix, roles) or _percentages(matrix, roles)
     if found is None:
         return None
@@ -54,29 +60,6 @@ def two_groups(matrix: Matrix) -> Understood | None:
         found = msgspec.structs.replace(found, quantities=pair)
     names = (matrix.labels[0].label, matrix.labels[1].label)
     return msgspec.structs.replace(found, labels=names, doubts=doubts, score=score)
-
-
-def _by_case(heads: Sequence[Head]) -> bool:
-    """Whether cases stand beside controls: outcomes by which people were chosen, not groups."""
-    said = [set(heading_words(head.label)) for head in heads]
-    return any("cases" in each for each in said) and any("controls" in each for each in said)
-
-
-def _corner(corner: str) -> int:
-    """1 where the corner says that rows are groups, -1 where it says that they are outcomes."""
-    said = set(heading_words(corner))
-    groups = said & {"arm", "group", "groups", "treatment", "exposure", "intervention", "drug", "strategy", "ward"}
-    outcomes = said & {"outcome", "outcomes", "characteristic", "event", "events", "variable", "endpoint", "end-point"}
-    return 1 if groups else -1 if outcomes else 0
-
-
-def _roles(heads: Sequence[Head]) -> list[Role]:
-    """The roles of all headings; "controls" are those without the event only where "cases" stand beside them."""
-    said = [set(heading_words(head.label)) for head in heads]
-    roles = [role_of(head.label) for head in heads]
-    if any("cases" in each for each in said):
-        roles = ["others" if "controls" in each else role for each, role in zip(said, roles, strict=True)]
-    return roles
 
 
 def agrees(quantity: Quantity, found: Understood) -> bool:
@@ -134,8 +117,8 @@ def _counted(matrix: Matrix, roles: Sequence[Role]) -> Understood | None:
         events = [place for place in columns if place not in timed and roles[place] != "total"]
         return _timed(matrix, events, timed[0])
     totals = [label.total for label in matrix.labels]
-    if all(totals):
-        return _of_printed_totals(matrix, columns, roles, totals)
+    if all(totals) and (found := _of_printed_totals(matrix, columns, roles, totals)):
+        return found
     if len(columns) == 1:
         return _without_totals(matrix, columns[0])
     return _by_roles(matrix, columns, roles) or _by_order(matrix, columns)
@@ -332,8 +315,3 @@ def _percentages(matrix: Matrix, roles: Sequence[Role]) -> Understood | None:
         doubts=("several-rows",) if len(percents) > 1 else (),
         score=2,
     )
-
-
-def usable(label: Head) -> bool:
-    """Whether a row's label does not say that it is the sum of the others."""
-    return not is_sum(label.label)

@@ -83,7 +83,7 @@ def _is_counted_percent(_: list[str], said: set[str]) -> bool:
 def _is_total(found: list[str], said: set[str]) -> bool:
     if said == {"no"}:
         return False
-    people = said <= {"n", "no", "number", "of"} | PEOPLE
+    people = said <= {"n", "no", "number", "of"} | PEOPLE - {"cases", "controls", "survivors", "survivor"}
     return people or (found[0] in _TOTAL and len(found) <= 3 and not said & _EVENTS)
 
 

@@ -18,6 +18,7 @@ from fourcount.record.entry.pasted.vocabulary import (
 from fourcount.record.entry.tokens import Print, Token
 
 _MOST_WORDS = 9
+_FAR = 3
 _WITH = ("with", "without")
 _JOINING = frozenset(("-", "/", "+", "&"))
 _ALWAYS_STOP = COMPARATORS | VERBS | {"respectively", "who", "which", "that", "p", "n", "as"}
@@ -35,8 +36,8 @@ class Labels:
     def of(self, first: Quantity, second: Quantity, start: int, end: int) -> tuple[str, str]:
         """Both labels, "" where none is told; ``start`` and ``end`` bound the sentence."""
         after = (
-            self._behind_leading_total(first, start) or self.behind(first.after, second.first),
-            self._behind_leading_total(second, first.after) or self.behind(second.after, end),
+            self._behind_leading(first, start) or self.behind(first.after, second.first),
+            self._behind_leading(second, first.after) or self.behind(second.after, end),
         )
         if all(after):
             return self._told_apart(*after)
@@ -47,7 +48,7 @@ class Labels:
             pair = self._both_behind(second.after, end) or self._both_ahead(start, first.first)
             if pair:
                 return self._told_apart(*pair)
-        if not any(after):
+        if not all(after):
             compared = self._of_subjects(start, first.first) or self._behind_totals(first, second, end)
             if compared:
                 return compared
@@ -57,12 +58,31 @@ class Labels:
             return self._told_apart(self.behind(start, first.first), after[1] or before[1])
         return self._told_apart(after[0] or before[0], after[1] or before[1])
 
-    def _behind_leading_total(self, quantity: Quantity, start: int) -> str:
-        """The label in "of the 320 women allocated to walking, 48 ..."."""
-        total = quantity.total
-        if total is None or total.start >= self.tokens[quantity.first].start:
+    def _behind_leading(self, quantity: Quantity, start: int) -> str:
+        """The label in "of the 320 women allocated to walking, 48 ..." and in "2.5% in the sock group (10/400)"."""
+        total, events = quantity.total, quantity.events
+        ahead = self.tokens[quantity.first]
+        if events is not None and ahead == events and quantity.percent is not None:
+            percent = next(
+                (place for place in range(quantity.first, quantity.after) if self.tokens[place] == quantity.percent), 0
+            )
+            between = total is not None and ahead.start < total.start < self.tokens[percent].start
+            if percent - quantity.first > _FAR and not between:
+                return self.behind(quantity.first + 1, percent - 1)
+        if total is None:
             return ""
-        place = next((place for place in range(start, quantity.first) if self.tokens[place] is total), quantity.first)
+        if ahead is quantity.percent and events is not None:
+            counted = next(
+                (place for place in range(quantity.first, quantity.after) if self.tokens[place] == events), 0
+            )
+            return (
+                self.behind(quantity.first + 1, counted)
+                if counted - quantity.first > 2 and self.tokens[counted - 1].text != "="
+                else ""
+            )
+        if total.start >= ahead.start:
+            return ""
+        place = next((place for place in range(start, quantity.first) if self.tokens[place] == total), quantity.first)
         return self.behind(place + 1, quantity.first)
 
     def _of_subjects(self, start: int, end: int) -> tuple[str, str] | None:
@@ -90,7 +110,10 @@ class Labels:
         one, two = places.get(first.total.start), places.get(second.total.start)
         if one is None or two is None or not one < two or first.first < one < first.after:
             return None
-        pair = self.behind(one + 1, two), self.behind(two + 1, first.first if two < first.first else end)
+        if one > second.after and self.tokens[one - 1].text == "=":
+            pair = self.ahead(one - 2, second.after), self.ahead(two - 2, one)
+        else:
+            pair = self.behind(one + 1, two), self.behind(two + 1, first.first if two < first.first else end)
         return pair if all(pair) else None
 
     def _told_apart(self, first: str, second: str) -> tuple[str, str]:
@@ -209,7 +232,7 @@ class Labels:
             after -= 1
         while start < after and self.tokens[after - 1].kind == "mark":
             after -= 1
-        if start >= after:
+        if not any(token.kind == "word" for token in self.tokens[start:after]):
             return ""
         lead = self.tokens[kept].text + " " if kept is not None else ""
         return (lead + self.printed.piece(start, after)).rstrip(".").replace("\n", " ")
@@ -280,6 +303,8 @@ class Labels:
             place += 1
         if border is None:
             return None
+        while start < border and self.tokens[start].lower in ("to", *LINKING):
+            start += 1
         pair = self._trimmed(start, border, None), self._trimmed(border + 1, place, None)
         return pair if all(pair) else None
 

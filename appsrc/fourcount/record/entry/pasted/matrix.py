@@ -65,6 +65,9 @@ def matrix_of(grid: Grid) -> Matrix | None:
     between = [place for place in range(body[0], len(rows)) if place not in body]
     heads, corner = _heads(above + [rows[place] for place in between if _all_totals(rows[place])], lead, width)
     sections = _sections(rows, body, above)
+    if len(sections) == len(lines) and not any(label.label for label, _ in lines):
+        lines = [(Head(name), cells) for (name, _), (_, cells) in zip(sections, lines, strict=True)]
+        heads, sections = (Head(),) * width, ()
     return Matrix(
         rows=tuple(cells for _, cells in lines),
         labels=tuple(label for label, _ in lines),

@@ -145,7 +145,18 @@ class Phrases:
             return False
         if following.lower in TIME_UNITS or following.lower in NOT_COUNTED or following.text == "/":
             return False
+        if self.at(place - 1).lower != "of" and self._is_first_of_two(place):
+            return False
         return (events.whole or 0) <= total.whole <= _LARGEST and total.whole > 0
+
+    def _is_first_of_two(self, place: int) -> bool:
+        """Whether a total is the first in "among 540 and 528 patients", which are of two groups."""
+        second = place + 2
+        if self.at(place + 1).lower != "and" or self.at(second).whole is None:
+            return False
+        while self.at(second + 1).lower in PEOPLE:
+            second += 1
+        return self.at(second + 1).text in ("", ".", ",", ";", ")") or self.at(second + 1).lower == "respectively"
 
     def _over_time(self, place: int) -> Quantity | None:
         """``38 falls in 4,120 person-years``, ``38 events (4,120 person-years)``."""
@@ -189,6 +200,8 @@ class Phrases:
         """``38 (9.2%)``, ``38 patients (9.2%)``, whose total stands elsewhere."""
         events = self.at(place)
         percent, after = self._percent(self._nouns(place + 1, 4), events, None)
+        if percent is None and self.at(place + 1).lower in VERBS:
+            percent, after = self._percent(self._nouns(place + 2, 2), events, None)
         if percent is None:
             return Quantity(first=place, after=place + 1, events=events) if self.bare else None
         return Quantity(first=place, after=after, events=events, percent=percent)
@@ -209,7 +222,8 @@ class Phrases:
             if limits:
                 return Quantity(first=place, after=limits[2], percent=percent, low=limits[0], high=limits[1])
             close = self._nouns(inner + 1, 3)
-            if self.at(inner).whole is not None and self.at(close).text in CLOSING and self._countable(inner):
+            bracketed = self.at(place + 1).text in OPENING and self.at(close).text in CLOSING
+            if self.at(inner).whole is not None and bracketed and self._countable(inner):
                 return self._counted_percent(place, inner, close + 1)
         elif opened and (limits := self._limits(inner)):
             return Quantity(first=place, after=limits[2], percent=percent, low=limits[0], high=limits[1])

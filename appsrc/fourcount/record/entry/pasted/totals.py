@@ -33,7 +33,7 @@ def with_totals(
     what the count gives.
     """
     found = _candidates(tokens, taken, (first, second))
-    for totals, nearby in _ways(found, first, second, end):
+    for totals, nearby in _ways(tokens, found, first, second, end):
         if all(_fits(quantity, total) for quantity, total in zip((first, second), totals, strict=True)):
             one, two = (_given(quantity, total) for quantity, total in zip((first, second), totals, strict=True))
             return one, two, not nearby
@@ -71,13 +71,14 @@ def _candidates(tokens: Sequence[Token], taken: frozenset[int], quantities: Sequ
 
 
 def _ways(
-    found: Sequence[Candidate], first: Quantity, second: Quantity, end: int
+    tokens: Sequence[Token], found: Sequence[Candidate], first: Quantity, second: Quantity, end: int
 ) -> Iterator[tuple[tuple[Candidate | None, Candidate | None], bool]]:
     """Pairs of totals in the order in which they are believed, and whether they stand where totals usually do."""
     before = [each for each in found if each.place < first.first][-_MOST:]
     between = [each for each in found if first.after <= each.place < second.first][:_MOST]
     behind = [each for each in found if second.after <= each.place < end][:_MOST]
     after = [each for each in found if each.place >= second.after][:_MOST]
+    yield from (((each, each), True) for each in behind if _of_each(tokens, each.place))
     own_first, own_second = first.total is not None, second.total is not None
     if own_first and own_second:
         yield (None, None), True
@@ -95,6 +96,11 @@ def _ways(
         yield from (
             (pair, group is behind) for pair in _neighbours(group, backwards=group and group[0].place < first.first)
         )
+
+
+def _of_each(tokens: Sequence[Token], place: int) -> bool:
+    """Whether a number is the total of both groups: "of 300 each"."""
+    return place + 1 < len(tokens) and tokens[place + 1].lower in ("each", "per")
 
 
 def _neighbours(group: Sequence[Candidate], backwards: object) -> Iterator[tuple[Candidate, Candidate]]:

@@ -20,15 +20,15 @@ COMPARATORS = frozenset(words("versus vs v compared than against whereas while r
 JOINERS = frozenset(words("and or but with whereas while versus vs v compared than against to"))
 INTRODUCERS = frozenset(
     words(
-        "in with on receiving received receive given assigned allocated randomised randomized taking took using "
-        "used under without after before for from treated at among having who undergoing wearing offered not"
+        "invited in with on receiving received receive given assigned allocated randomised randomized taking took "
+        "using used under without after before for from treated at among having who undergoing wearing offered not"
     )
 )
 LINKING = frozenset(
     words(
-        "the a an those who were was had been being of all these patients participants people women men children "
-        "adults residents individuals subjects infants babies volunteers to receive be have group arm then that "
-        "persons"
+        "fewer more the a an those who were was had been being of all these patients participants people women men "
+        "children adults residents individuals subjects infants babies volunteers to receive be have group arm "
+        "then that persons"
     )
 )
 VERBS = frozenset(
@@ -37,7 +37,7 @@ VERBS = frozenset(
         "relapsed recovered healed stopped achieved met gave lost reached responded withdrew dropped improved "
         "became became returned survived vomited bled remained contracted attained showed discontinued failed quit "
         "delivered sustained progressed chose completed presented complained admitted readmitted noted slept "
-        "missed tripped coughed fainted felt went"
+        "missed tripped coughed fainted felt went woke slept moved attended"
     )
 )
 HAPPENED = frozenset(
