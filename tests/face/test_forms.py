@@ -91,6 +91,7 @@ def test_taking_a_form_is_one_step(example: Hands, form: Form) -> None:
     assert example.texts == ("38", "374", "70", "339")
     assert example.rows == rows
     assert example.window.printed.grid.isVisible()
+    assert example.field == ("paper_text" if form == "effect-only" else CELLS[0])
 
 
 @pytest.mark.parametrize("form", list(TYPED))
@@ -230,7 +231,7 @@ def test_a_printed_effect_is_carried_to_a_typed_starting_risk(hands: Hands) -> N
     assert patient.effect.currentText().startswith("odds ratio 0.49")
 
 
-@pytest.mark.parametrize("form", ["pairs", "person-time", "risk-at-time"])
+@pytest.mark.parametrize("form", ["pairs", "person-time"])
 def test_a_form_that_carries_nothing_says_so_quietly(hands: Hands, form: Form) -> None:
     """The patient's column has one sentence and no picture."""
     hands.do(f"form-{form}")

@@ -59,6 +59,7 @@ def test_enter_goes_through_the_rows_and_adds_one_at_the_end(hands: Hands) -> No
     assert hands.field == "strata.3.label_text"
     hands.do("undo")
     assert len(texts(hands)) == 3
+    assert hands.field == "strata.2.label_text"
 
 
 def test_arrows_go_up_and_down_a_column(strata: Hands) -> None:

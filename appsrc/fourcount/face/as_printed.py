@@ -96,7 +96,7 @@ class AsPrinted(FieldsView):
 
     def show_state(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
         """Show the outcome as typed, and a sentence for each marked cell."""
-        form = form_of(outcome.table)
+        form, focus = form_of(outcome.table), self.focused_field()
         self.design.show_choice(outcome.design)
         self.event_words.field = f"{outcome.counted}_words_text"
         self.event_words.show_text(outcome.event_words_text)
@@ -118,6 +118,14 @@ class AsPrinted(FieldsView):
         if self._rare or outcome != Outcome():
             self.rare.show_state(outcome, findings, self._width_of_names())
         self._show_marks(findings)
+        if focus and not focus.isVisible():  # its row, or its whole form, is gone
+            instead = (self._rare and self._rare.instead_of(focus)) or self.first_field
+            instead.setFocus(Qt.FocusReason.OtherFocusReason)
+
+    def focused_field(self) -> TextField | None:
+        """The field of this column that has the focus."""
+        focus = self.window().focusWidget()
+        return focus if isinstance(focus, TextField) and self.isAncestorOf(focus) else None
 
     def show_check(self, outcome: Outcome, check: CheckFindings | None, choices: Choices) -> None:
         """Show what the paper says and whether it adds up."""

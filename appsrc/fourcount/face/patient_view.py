@@ -49,7 +49,7 @@ def patient_view(outcome: Outcome, findings: OutcomeFindings, choices: Choices, 
     marks = {mark.field: mark_text(mark) for mark in findings.marks}
     view = PatientView(
         baseline_hint=_baseline_hint(outcome, findings),
-        own_risk=outcome.design != "case-control" and findings.form in COUNTED_FORMS,
+        own_risk=_own_risk(outcome, findings),
         effect=_effect(outcome, findings),
         effect_words=_effect_words(outcome, findings),
         effect_is_free=outcome.design != "case-control" and findings.form in (*COUNTED_FORMS, "strata"),
@@ -111,6 +111,13 @@ def _picture_words(words: PatientWords, lines: tuple[str, ...], drawn: Plan) -> 
     )
 
 
+def _own_risk(outcome: Outcome, findings: OutcomeFindings) -> bool:
+    """Whether an empty starting risk stands for the study's own."""
+    if isinstance(findings.patient, PatientFindings):
+        return findings.patient.baseline_from == "reference"
+    return outcome.design != "case-control" and findings.form in COUNTED_FORMS
+
+
 def _effect(outcome: Outcome, findings: OutcomeFindings) -> str:
     """The effect that is carried: the one chosen, unless design or print leave no choice."""
     if isinstance(findings.patient, PatientFindings):
@@ -129,7 +136,7 @@ def carried_measure(findings: OutcomeFindings, key: str) -> Figure | AnyNumberNe
 def _baseline_hint(outcome: Outcome, findings: OutcomeFindings) -> str:
     if outcome.design == "case-control" or findings.form in ("effect-only", "strata"):
         return labels.BASELINE_HINT_NEEDED
-    if findings.form not in COUNTED_FORMS:
+    if findings.form not in (*COUNTED_FORMS, "risk-at-time"):
         return ""
     risk = findings.measures.get("risk_reference")
     if isinstance(risk, Figure) and not isinstance(risk.estimate, Gap):

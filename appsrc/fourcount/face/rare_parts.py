@@ -7,7 +7,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING, NamedTuple
 
-from PySide6.QtCore import Signal
+from PySide6.QtCore import Qt, Signal
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QHBoxLayout, QVBoxLayout, QWidget
 
@@ -102,11 +102,18 @@ class RareParts(FieldsView):
         alone = isinstance(outcome.table, EffectOnly)
         if alone != self._alone:
             self._alone = alone
-            self._chain_paper()
-            if alone:
-                self._column.insertWidget(self._place_of_table(), view.paper)
-            else:
-                view.take_back()
+            self._move_paper(view)
+
+    def _move_paper(self, view: CheckView) -> None:
+        """Put the line of what the paper says in the table's place, or back; a cursor in it stays there."""
+        focused = view.paper.text.hasFocus()
+        self._chain_paper()
+        if self._alone:
+            self._column.insertWidget(self._place_of_table(), view.paper)
+        else:
+            view.take_back()
+        if focused:
+            view.paper.text.setFocus(Qt.FocusReason.OtherFocusReason)
 
     def show_marks(self, reasons: dict[str, str]) -> list[str]:
         """Mark the fields that have a reason; the fields that can be marked here."""
@@ -142,6 +149,12 @@ class RareParts(FieldsView):
         if self.strata and not self.strata.isHidden():
             return self.strata.rows[0].cells["first_left_text"]
         return self.check.paper.text if self.check and self._alone else None
+
+    def instead_of(self, field: TextField) -> TextField | None:
+        """Where the cursor goes from a row of strata that is gone, while others are there."""
+        if field.field.startswith("strata.") and self.strata and not self.strata.isHidden():
+            return self.strata.rows[-1].label
+        return None
 
     def paper_field(self, outcome: Outcome, choices: Choices, width: int) -> TextField:
         """The field of what the paper says; once asked for, it stays."""

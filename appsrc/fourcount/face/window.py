@@ -202,7 +202,8 @@ class MainWindow(QMainWindow):
         found = self.checking.found if self.checking else None
         choices = self.session.record.choices
         self.printed.show_check(self.session.outcome, found, choices)
-        self.actions_by_key["adopt"].setEnabled(bool(found and found.adopt))
+        new = bool(found and found.adopt and found.adopt != (choices.family, choices.level))
+        self.actions_by_key["adopt"].setEnabled(new)
 
     def _ask_for_the_rest(self) -> None:
         if self.session.findings is not None:

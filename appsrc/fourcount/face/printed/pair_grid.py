@@ -53,7 +53,9 @@ def show_pairs(grid: Grid, outcome: Outcome) -> None:
     heading = grid.headings["left"]
     event = heading.text().strip() or heading.placeholderText()
     for field, cell in grid.cells.items():
-        cell.setAccessibleName(PAIR_NAMES[field].format(outcome=event, **sides))
+        name = PAIR_NAMES[field].format(outcome=event, **sides)
+        if name != cell.accessibleName():
+            cell.setAccessibleName(name)
     for field, pattern in PAIR_NOTES.items():
         grid.note(field).setText(pattern.format(**sides))
     grid.roles["second"].setAlignment(grid.total_heading.alignment())

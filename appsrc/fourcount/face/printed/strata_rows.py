@@ -11,7 +11,7 @@ from fourcount.face.cell import CountCell
 from fourcount.face.fields import FieldsView, QuietField, TextField
 from fourcount.face.look import Look
 from fourcount.face.printed.strata_heads import StrataHeads
-from fourcount.record.outcome import CELLS, Outcome, Strata
+from fourcount.record.outcome import CELLS, Outcome, Strata, Stratum
 from fourcount.wording import labels
 from fourcount.wording.printed_labels import STRATUM_CELL
 
@@ -48,6 +48,7 @@ class StrataRows(FieldsView):
         super().__init__()
         self._look = look
         self._rows: list[StratumRow] = []
+        self._shown: dict[int, tuple[Stratum, dict[str, str]]] = {}
         self.current = 0
         self._count = 0
         self._layout = QGridLayout(self)
@@ -87,11 +88,15 @@ class StrataRows(FieldsView):
             for place, row in enumerate(self._rows):
                 for field in row.fields:
                     field.setVisible(place < self._count)
+        names = {name: self.heads.name(name) for name in CELLS}
         for place, (row, stratum) in enumerate(zip(self.rows, table.strata, strict=True)):
+            if (stratum, names) == self._shown.get(place):
+                continue
+            self._shown[place] = (stratum, names)
             row.label.show_text(stratum.label_text)
             for name, cell in row.cells.items():
                 cell.show_text(getattr(stratum, name))
-                cell.setAccessibleName(self._cell_name(place, name))
+                cell.setAccessibleName(STRATUM_CELL.format(number=place + 1, name=names[name]))
         self._show_feet(findings, table.of_total)
 
     def show_marks(self, reasons: dict[str, str]) -> None:
@@ -111,9 +116,6 @@ class StrataRows(FieldsView):
         """The place of the row that a field stands in; the current one where it stands in none."""
         parts = field.split(".")
         return int(parts[1]) if parts[0] == "strata" else self.current
-
-    def _cell_name(self, place: int, name: str) -> str:
-        return STRATUM_CELL.format(number=place + 1, name=self.heads.name(name))
 
     def _add_row(self) -> None:
         place = len(self._rows)
