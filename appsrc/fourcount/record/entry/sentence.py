@@ -13,7 +13,7 @@ from fourcount.record.entry.pasted.event_words import event_words, time_span
 from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
 from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity, gives
 from fourcount.record.entry.pasted.totals import shared_total, with_totals
-from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, INTRODUCERS, NOT_PEOPLE, PEOPLE
+from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, INTRODUCERS, LINKING, NOT_PEOPLE, PEOPLE
 from fourcount.record.entry.printed import named_figures
 from fourcount.record.entry.readings import Pasted, PastedGroup
 from fourcount.record.entry.tokens import LONGEST_TEXT, Print, Token, as_sentence, take_apart
@@ -208,7 +208,9 @@ class SentenceReader:
         told = all(each.percent is not None and _agrees(each) for each in (first, second))
         behind = {token.lower for token in self.tokens[second.after : bounds[1]]}
         ahead = {token.lower for token in self.tokens[bounds[0] : first.first]}
-        return told or bool(INTRODUCERS & between and INTRODUCERS & (behind | ahead))
+        noun = self.tokens[first.after]
+        people = noun.kind != "word" or noun.lower in INTRODUCERS | PEOPLE | LINKING
+        return told or (people and bool(INTRODUCERS & between and INTRODUCERS & (behind | ahead)))
 
     def _pasted(
         self,
