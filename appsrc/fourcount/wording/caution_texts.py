@@ -121,7 +121,7 @@ TEXTS = {
     ),
     "interval-rebuilt": (
         "A rebuilt interval",
-        "No limits are printed; the interval is rebuilt from p = {p}, which is approximate.",
+        "No limits are printed; the interval is rebuilt from {p}, which is approximate.",
     ),
     "printed-level": (
         "The level of the print",
@@ -188,7 +188,7 @@ TEXTS = {
     ),
     "strata-unlike": (
         "Strata unlike each other",
-        "The strata’s odds ratios differ (p = {p}): one pooled figure hides that; look at each stratum.",
+        "The strata’s odds ratios differ ({p}): one pooled figure hides that; look at each stratum.",
     ),
     "no-meta-analysis": (
         "Strata of one study",

@@ -88,4 +88,4 @@ def _said(caution: Caution) -> dict[str, str]:
 def _per_100(difference: Fact) -> str:
     if isinstance(difference, str):
         return difference
-    return f"{numbers.hundred(difference)} {limits.side(difference)} per 100"
+    return f"{numbers.hundred(difference)} {limits.side(difference)} per 100" if difference else "0.0 per 100"

@@ -1,0 +1,133 @@
+"""Cautions of the forms beyond four counts, in whole sentences with their numbers."""
+
+from __future__ import annotations
+
+import pytest
+
+from forms import CONFOUNDED, at_time, effect_only, of_total, paired, percent_of_total, strata
+from fourcount.appraisal.appraise import appraise
+from fourcount.appraisal.findings import Caution
+from fourcount.record.paper import Choices
+from fourcount.wording.cautions import caution_text
+
+
+def cautions_of(outcome, choices=None):
+    """The texts of every caution by its key."""
+    found = appraise(outcome, choices or Choices()).cautions
+    return {caution.key: [caution_text(one) for one in found if one.key == caution.key] for caution in found}
+
+
+@pytest.mark.parametrize(
+    ("outcome", "key", "text"),
+    [
+        (
+            strata(rows=CONFOUNDED),
+            "strata-part",
+            (
+                "The difference is 15.0 more per 100 crude and 0.0 per 100 pooled: more than a tenth apart, or on "
+                "different sides of no effect. Confounding by what the strata differ in can do that."
+            ),
+        ),
+        (
+            of_total(icc_text="0.02", cluster_size_text="21"),
+            "cluster-corrected",
+            (
+                "Intervals and p rest on counts divided by the design effect of 1.40 (intracluster correlation 0.02, "
+                "mean size 21); they are as good as that correlation."
+            ),
+        ),
+        (
+            of_total(cluster_size_text="21"),
+            "cluster-without-icc",
+            (
+                "Whole clusters were assigned, and intervals that take people for independent are too narrow: type the "
+                "intracluster correlation."
+            ),
+        ),
+        (
+            of_total(first_lost_text="20", second_lost_text="10"),
+            "losses-overturn",
+            (
+                "Had those lost (30) fared otherwise (in the extreme against the result), the interval of the "
+                "difference would tell something else about no effect."
+            ),
+        ),
+        (
+            of_total(first_randomised_text="450", first_lost_text="20", second_lost_text="10"),
+            "randomised-differs",
+            (
+                "Night lights: 450 people were randomised, while 412 are in the table and 20 are said to be lost; "
+                "check who was left out."
+            ),
+        ),
+        (
+            at_time(level="90%"),
+            "printed-level",
+            "The intervals keep the print’s own level of 90%; the level of 95% chosen here does not change them.",
+        ),
+        (
+            effect_only("risk_ratio", "1.5, p = 0.03"),
+            "interval-rebuilt",
+            "No limits are printed; the interval is rebuilt from p = 0.030, which is approximate.",
+        ),
+        (
+            effect_only("odds_ratio", design="cohort", adjusted_for_text="age and sex"),
+            "adjusted-effect",
+            (
+                "A cohort study can adjust only for what it measured, here age and sex; what it did not measure may "
+                "still explain it."
+            ),
+        ),
+        (
+            of_total(design="cohort", adjusted_text="0.61 (0.42 to 0.88)", adjusted_for_text="age"),
+            "crude-beside-adjusted",
+            "The figures of this table are crude; the paper’s own odds ratio, adjusted for age, is 0.61.",
+        ),
+        (
+            of_total(design="cohort", adjusted_text="0.61 (0.42 to 0.88)"),
+            "crude-beside-adjusted",
+            "The figures of this table are crude; the paper’s own odds ratio, adjusted, is 0.61.",
+        ),
+        (
+            strata(),
+            "no-meta-analysis",
+            ("This pools the 2 strata of one study. It is no meta-analysis: several studies differ in more ways."),
+        ),
+        (
+            paired("matched"),
+            "observational",
+            (
+                "The pairs are alike in what they were matched for; other differences between cases and controls may "
+                "explain the odds ratio."
+            ),
+        ),
+        (
+            effect_only("risk_ratio", risk="12%"),
+            "effect-kept-elsewhere",
+            "The risk ratio is assumed to be the same at 12% as in the study, whose own risk is not known here.",
+        ),
+        (
+            percent_of_total(),
+            "percent-several",
+            None,
+        ),
+    ],
+)
+def test_a_caution_says_the_numbers_it_is_about(outcome, key, text):
+    """Word for word where it holds; a percentage that fits one whole number alone is no caution."""
+    told = cautions_of(outcome).get(key, [None])
+    assert text in told
+
+
+def test_all_whole_numbers_of_a_percentage_are_named():
+    """And the one that is taken."""
+    text = caution_text(
+        Caution(key="percent-several", facts={"text": "9%", "counts": "36, 37, 38", "total": 412, "value": 37})
+    )
+    assert text == "9%: 36, 37, 38 of 412 all round to this percentage; 37, the nearest, is taken."
+
+
+@pytest.mark.parametrize(("odds", "told"), [(0.02, "p = 0.020"), (0.0004, "p < 0.001")])
+def test_strata_unlike_each_other_tell_their_p(odds, told):
+    """As every p is written."""
+    assert told in caution_text(Caution(key="strata-unlike", facts={"p": odds}))
