@@ -38,7 +38,8 @@ ALL_METHODS = (*METHODS, *PAIR_METHODS, *RATE_METHODS, *STRATA_METHODS, *TIMED_M
 SHOWN = (*ALL_METHODS, *TESTS, *PAIR_TESTS, *RATE_TESTS, *STRATA_TESTS, *HOMOGENEITY_TESTS, *EXTRAS, *RECOVERIES)
 LIGHT = ("cautions", "facts", "gaps", "names", "numbers")
 OTHERS = (
-    "basis", "carried", "example", "headline", "help", "limits", "lines", "meanings", "patient", "patient_sentence",
+    "basis", "carried", "example", "extras", "form", "headlines", "p_value", "pairs", "person_time", "printed",
+    "headline", "help", "limits", "lines", "meanings", "patient", "patient_sentence",
     "sentence", "working",
 )  # fmt: skip
 

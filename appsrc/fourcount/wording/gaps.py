@@ -71,8 +71,8 @@ GAP_TEXTS = {
     "effect-unreadable": "The printed effect cannot be read; “0.54 (0.37 to 0.78)” would do.",
     "effect-not-typed": "Type the printed effect with its limits, such as 0.54 (0.37 to 0.78).",
     "no-interval-printed": "The print gives neither limits nor an exact p to rebuild them from.",
-    "carried-later": "This form is not carried to a patient here; the counts of both groups, or a printed risk ratio "
-    "or odds ratio with a starting risk, can be.",
+    "carried-later": "This form is not carried to a patient here; counts of both groups, two printed risks, or a "
+    "printed risk ratio or odds ratio with a starting risk can be.",
     "no-losses": "Nobody is said to be lost; type how many of each group were.",
     "losses-unreadable": "A number lost, or the ratio of risks among the lost, cannot be read.",
     "clusters-not-here": "Nothing here corrects this figure for clusters, so it is not given.",

@@ -10,6 +10,7 @@ from fourcount.record.paper import Choices, Record
 from fourcount.wording import carried, limits, names, numbers, of_people
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import caution_text
+from fourcount.wording.form import shown_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
 from fourcount.wording.headline import DO_NOT_ADD_UP
@@ -62,6 +63,7 @@ def patient_words(
             without_title=without_title, with_title=with_title, detail=gap_text(patient), missing=missing(outcome)
         )
     people = denominator or carried.denominator_for_text(patient)
+    choices = shown_choices(findings, choices)
     change = patient.difference.estimate
     return PatientWords(
         without_title=without_title,

@@ -6,6 +6,7 @@ from fourcount.appraisal.findings import Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import carried, names, numbers, of_people
+from fourcount.wording.form import shown_choices
 
 AS_IN_THE_STUDY = "The study’s figures hold as they stand."
 
@@ -17,7 +18,7 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
         return ""
     if patient.baseline_from == "reference":
         return AS_IN_THE_STUDY
-    people = carried.denominator_for_text(patient)
+    people, choices = carried.denominator_for_text(patient), shown_choices(findings, choices)
     span = names.within_span(outcome)
     first = (
         f"Of {numbers.whole(people)} people {names.in_group(outcome, 'reference')} "
