@@ -6,6 +6,7 @@ import pytest
 
 from fourcount.record.entry.printed import PAPER_MARKS, read_paper
 from fourcount.record.entry.readings import PrintedFigure
+from pastes import cases, figure_line
 
 # text, then for each figure: measure, estimate, low, high, level, p, relation, unit, adjusted
 FIGURES = [
@@ -68,3 +69,17 @@ def test_the_marks_are_the_listed_ones() -> None:
         text: [key] for text, key in doubtful.items()
     }
     assert set(doubtful.values()) <= set(PAPER_MARKS)
+
+
+@pytest.mark.parametrize(("text", "expected"), cases("printed.txt"), ids=[text for text, _ in cases("printed.txt")])
+def test_results_in_the_manner_of_many_papers_are_read(text: str, expected: list[str]) -> None:
+    """Commas, semicolons, brackets of all kinds, levels before and behind, units and exponents are all understood."""
+    reading = read_paper(text, "risk_ratio")
+    figures = [f"figure: {figure_line(figure)}" for figure in reading.figures]
+    assert [*figures, *(f"mark: {mark.key}" for mark in reading.marks)] == expected
+
+
+@pytest.mark.parametrize("text", ["P for interaction = 0.32", "OR >100", "see Table 2 of 3", ""])
+def test_what_is_no_result_gives_none(text: str) -> None:
+    """The p of an interaction, a bound and a page are no results of the comparison."""
+    assert not [figure for figure in read_paper(text, "risk_ratio").figures if figure.measure != "risk_ratio"]

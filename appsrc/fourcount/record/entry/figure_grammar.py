@@ -3,15 +3,15 @@
 from __future__ import annotations
 
 from collections.abc import Sequence
-from typing import Literal
+
+import msgspec
 
 from fourcount.record.entry.figure_names import ADJUSTED, Name, name_at
+from fourcount.record.entry.p_values import FoundP, Relation, p_at
 from fourcount.record.entry.readings import PrintedMeasure, PrintedNumber, PrintedUnit
 from fourcount.record.entry.tokens import Token
 from fourcount.record.entry.word_list import words
 from fourcount.record.outcome import PaperMeasure
-
-Relation = Literal["=", "<", ">"]
 
 _OPENING = ("(", "[", "{")
 _CLOSING = (")", "]", "}")
@@ -39,9 +39,7 @@ _TIME_WORDS = frozenset(
     words("second seconds minute minutes min hour hours h day days d week weeks wk month months mo year years yr yrs")
 )
 _USUAL_LEVELS = (80, 90, 95, 97.5, 98, 99, 99.9)
-_P_WORDS = ("p", "p-value", "p-values")
-_NOT_THE_P_OF_AN_EFFECT = ("interaction", "trend", "heterogeneity", "noninferiority", "non-inferiority", "homogeneity")
-_RELATIONS = ("=", "<", ">")
+_RISKS = ("risk", "incidence", "mortality", "prevalence", "proportion")
 _LONGEST_WAY = 14
 
 
@@ -81,6 +79,8 @@ class Figure:
             return "p"
         percent = self.unit == "percent"
         if self.name is None:
+            if self.unit == "per-1000":
+                return usual if usual.endswith("difference") else "risk_difference"
             if not percent or usual.endswith("difference"):
                 return usual
             return "risk_difference" if self.estimate.value < 0 or self.low else "risk"
@@ -112,11 +112,13 @@ class Grammar:
             elif level_found := self.level_at(place):
                 level, place = level_found
                 name = name and (place, name[1])
-            elif p_found := self.p_at(place):
+            elif p_found := p_at(self.tokens, place):
                 place = self._take_p(found, place, p_found)
             elif self._begins_figure(place, name is not None):
                 figure = self._figure(place, name)
                 figure.level = figure.level or level
+                if figure.name is None and figure.low and figure.unit == "one" and found and found[-1].name:
+                    figure.name = msgspec.structs.replace(found[-1].name, adjusted=False)
                 name, level, place = None, None, figure.after
                 if found and figure.bare:
                     self.leftover.append(self.tokens[figure.first])
@@ -130,6 +132,8 @@ class Grammar:
 
     def _name(self, place: int) -> Name | None:
         name = name_at(self.tokens, place)
+        if name is None and self.unnamed and self.tokens[place].lower in _RISKS:
+            return Name("risk", 1)
         if name and self.tokens[place].text == "OR":
             following = self._at(place + 1)
             if following.kind == "word" and following.lower not in _FILLERS | {"for", "or"}:
@@ -147,7 +151,9 @@ class Grammar:
             return False
         if following.lower in _TIME_WORDS or following.text == "/" or following.lower in ("of", "patients"):
             return False
-        return self._at(place - 1).text != "/" and not (self._at(place - 1).lower in ("of",) and not named)
+        if self._at(place - 1).text in ("/", "<", ">"):
+            return False
+        return not (self._at(place - 1).lower in ("of",) and not named)
 
     def _figure(self, place: int, name: tuple[int, Name] | None) -> Figure:
         figure = Figure(name[0] if name else place, name[1] if name else None)
@@ -159,10 +165,12 @@ class Grammar:
         opened = False
         while place < len(self.tokens):
             token = self.tokens[place]
-            if level := self.level_at(place):
+            if token.text in _OPENING and (close := self._unbounded(figure, place)):
+                place = figure.after = close
+            elif level := self.level_at(place):
                 figure.level, figure.after = level
                 opened, place = True, figure.after
-            elif (p := self.p_at(place)) and figure.p is None:
+            elif (p := p_at(self.tokens, place)) and figure.p is None:
                 place = self._take_p([figure], place, p)
             elif figure.low is None and token.kind == "number" and (after := self._limits(figure, place, opened)):
                 place = figure.after = after
@@ -175,6 +183,17 @@ class Grammar:
                 break
         self._close(figure)
         return figure
+
+    def _unbounded(self, figure: Figure, place: int) -> int | None:
+        """The place after "(NNTB 8 to infinity to NNTH 31)", limits that are two ranges; None for anything else."""
+        if figure.measure_or("risk_ratio") != "number_needed":
+            return None
+        within = range(place, min(place + 14, len(self.tokens)))
+        close = next((step for step in within if self.tokens[step].text in _CLOSING), None)
+        if close is None or not any(self._at(step).text in ("\u221e", "infinity") for step in range(place, close)):
+            return None
+        figure.one_limit = "\u221e"
+        return close + 1
 
     def _passes(self, place: int) -> bool:
         token = self.tokens[place]
@@ -195,6 +214,9 @@ class Grammar:
             return self._unit(figure, place + 3)
         before = self._at(place - 1)
         alone = before.text in (*_OPENING, ",", ";", ":") or before.lower in _INTERVAL_WORDS
+        if between.kind == "number" and not opened and estimate and token.value <= estimate.value <= between.value:
+            figure.low, figure.high = printed_number(token), printed_number(between)
+            return place + 2
         if not opened or not alone or between.text not in (*_CLOSING, ""):
             return None
         if "," in token.text and token.decimals and estimate and "," not in estimate.text:
@@ -236,42 +258,24 @@ class Grammar:
             step = 2 if following.text == "-" else 1
             if self._at(place + step).lower in _INTERVAL_WORDS:
                 return token.value / 100, place + step + 1
+        if token.lower.startswith("ci") and token.lower[2:].isdecimal() and following.text == "%":
+            return float(token.lower[2:]) / 100, place + 2
         usual = following.kind == "number" and following.percent and following.value in _USUAL_LEVELS
         if usual and token.lower in _INTERVAL_WORDS and self._at(place + 2).lower not in ("to", "-"):
             return following.value / 100, place + 2
         return None
 
-    def p_at(self, place: int) -> tuple[Relation, Token, int, bool] | None:
-        """A p that begins here: relation, number, the place after it, and whether it is the effect's own."""
-        if self.tokens[place].lower not in _P_WORDS:
-            return None
-        own, relation = True, "="
-        for step in range(place + 1, min(place + 9, len(self.tokens))):
-            token = self.tokens[step]
-            if token.kind == "number":
-                told = token.decimals > 0 or relation != "="
-                return (relation, token, step + 1, own) if told or token.value in (0, 1) else None  # type: ignore[return-value]
-            if token.lower in _NOT_THE_P_OF_AN_EFFECT:
-                own = False
-            elif token.text in _RELATIONS:
-                relation = token.text if relation == "=" else relation
-            elif token.lower not in ("value", "values", "of", "was", "is", "for", "the", "by", "less", "than"):
-                return None
-            elif token.lower == "less":
-                relation = "<"
-        return None
-
-    def _take_p(self, found: list[Figure], place: int, p: tuple[Relation, Token, int, bool]) -> int:
+    def _take_p(self, found: list[Figure], place: int, p: FoundP) -> int:
         """Give a p to the result before it, or make it one of its own."""
-        relation, token, after, own = p
-        if not own:
+        after = p.after
+        if not p.own:
             return after
         if found and found[-1].p is not None and not self.unnamed:
             return after
         if not found or found[-1].p is not None:
             found.append(Figure(place, None))
         figure = found[-1]
-        figure.p, figure.p_relation, figure.after = printed_number(token), relation, after
+        figure.p, figure.p_relation, figure.after = p.number, p.relation, after
         self._close(figure)
         return figure.after
 
