@@ -11,7 +11,6 @@ from fourcount.appraisal.findings import (
     Given,
     OutcomeFindings,
     PrintedFigure,
-    Recovered,
     TimedRisks,
 )
 from fourcount.record.outcome import COUNTED_FORMS
@@ -45,8 +44,7 @@ def lacking(findings: OutcomeFindings) -> Gap | None:
 def level_of(findings: OutcomeFindings, choices: Choices) -> float:
     """The level of the intervals that are shown: the record's, or that of the print where only the print has any."""
     found = findings.given
-    recovered = findings.extras.recovered
-    if isinstance(found, PrintedFigure) and not (isinstance(recovered, Recovered) and recovered.from_p):
+    if isinstance(found, PrintedFigure):
         return found.level or PRINTED_LEVEL
     return found.level if isinstance(found, TimedRisks) else choices.level
 
