@@ -21,7 +21,7 @@ def described(pasted: Pasted | None) -> list[str]:
         lines.append("strata: " + " | ".join(pasted.stratum_labels))
     lines += [
         f"{name}: {value}"
-        for name in ("left_heading", "right_heading", "words", "unit", "span", "paper_text")
+        for name in ("left_heading", "right_heading", "words", "unit", "span", "limits_level", "paper_text")
         if (value := getattr(pasted, name))
     ]
     if pasted.layout == "across":

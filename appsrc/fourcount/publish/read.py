@@ -47,6 +47,7 @@ def read(text: str) -> Json:
         "words": pasted.words,
         "unit": pasted.unit,
         "span": pasted.span,
+        "limits_level": pasted.limits_level,
         "printed": [_figure(figure) for figure in pasted.figures],
         "printed_text": pasted.paper_text,
         "ambiguous": list(pasted.ambiguous),

@@ -114,6 +114,7 @@ def _table(found: Understood, doubts: Sequence[str], layout: Layout) -> Pasted:
         left_heading=_heading(found.left_heading),
         right_heading=_heading(found.right_heading),
         unit=found.unit,
+        limits_level=found.quantities[0].level_text or found.quantities[1].level_text,
         layout=layout,
         ambiguous=tuple(dict.fromkeys(doubts)),
     )

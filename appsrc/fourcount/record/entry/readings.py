@@ -190,8 +190,9 @@ class Pasted(msgspec.Struct, frozen=True, kw_only=True):
     ``left_heading`` and ``right_heading`` are headings told by a block; ``words`` says the event in full where a
     sentence told it; ``unit`` is that of person-time. ``figures`` are printed results beside the counts and
     ``paper_text`` the piece of text that holds them. ``ambiguous`` lists by key what might be understood otherwise; a
-    window shows what was understood before it is taken where anything is listed. ``strata_of_total`` says that the
-    right cells of strata are totals. ``source`` is "block" or "sentence".
+    window shows what was understood before it is taken where anything is listed. ``limits_level`` is the level printed
+    with limits of risks ("90%"). ``strata_of_total`` says that the right cells of strata are totals. ``source`` is
+    "block" or "sentence".
     """
 
     form: Form
@@ -206,5 +207,6 @@ class Pasted(msgspec.Struct, frozen=True, kw_only=True):
     figures: tuple[PrintedFigure, ...] = ()
     paper_text: str = ""
     ambiguous: tuple[str, ...] = ()
+    limits_level: str = ""
     strata_of_total: bool = True
     source: Literal["block", "sentence"] = "block"

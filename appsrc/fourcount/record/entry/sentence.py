@@ -238,6 +238,7 @@ class SentenceReader:
             groups=tuple(_group(form, quantity, label) for quantity, label in zip(pair, labels, strict=True)),
             words="" if words.casefold() in (label.casefold() for label in labels) else words,
             unit=pair[0].unit or pair[1].unit,
+            limits_level=pair[0].level_text or pair[1].level_text,
             span=time_span(self.printed, *bounds) or time_span(self.printed, 0, len(self.tokens)),
             figures=self.figures,
             paper_text=self._paper_text(),

@@ -39,7 +39,7 @@ class Quantity(msgspec.Struct, frozen=True, kw_only=True):
     unit: str = ""
     low: Token | None = None
     high: Token | None = None
-    shared_total: bool = False
+    level_text: str = ""
 
     @property
     def complete(self) -> bool:
@@ -218,15 +218,15 @@ class Phrases:
             counted = self._of_total(inner) or self._over_time(inner)
             if counted and self._gives(percent, counted.events, counted.total):
                 return msgspec.structs.replace(counted, first=place, percent=percent)
-            limits = self._limits(inner)
-            if limits:
-                return Quantity(first=place, after=limits[2], percent=percent, low=limits[0], high=limits[1])
+            limited = self._limits(place, inner, percent)
+            if limited:
+                return limited
             close = self._nouns(inner + 1, 3)
             bracketed = self.at(place + 1).text in OPENING and self.at(close).text in CLOSING
             if self.at(inner).whole is not None and bracketed and self._countable(inner):
                 return self._counted_percent(place, inner, close + 1)
-        elif opened and (limits := self._limits(inner)):
-            return Quantity(first=place, after=limits[2], percent=percent, low=limits[0], high=limits[1])
+        elif opened and (limited := self._limits(place, inner, percent)):
+            return limited
         total = self._behind_of(place + 1, noun=percent)
         if total and self._is_total(total, Token("number", "0", 0, 0, "", 0.0, 0)):
             after = self._nouns(total + 1, 4)
@@ -246,17 +246,20 @@ class Phrases:
             return Quantity(first=place, after=total + 1, events=events, total=self.at(total), percent=percent)
         return Quantity(first=place, after=after, events=events, percent=percent)
 
-    def _limits(self, place: int) -> tuple[Token, Token, int] | None:
-        """Two limits inside a bracket, behind "95% CI" or at once."""
+    def _limits(self, start: int, place: int, percent: Token) -> Quantity | None:
+        """A risk with two limits inside a bracket, behind "95% CI" or at once."""
+        level = ""
         for _ in range(6):
             token = self.at(place)
             if token.kind == "number" and self.at(place + 1).lower in ("to", "-", ",", ";", "and"):
                 low, high = token, self.at(place + 2)
-                ordered = high.kind == "number" and 0 <= low.value <= high.value <= 100
-                return (low, high, place + 3) if ordered else None
+                if high.kind != "number" or not 0 <= low.value <= high.value <= 100:
+                    return None
+                return Quantity(first=start, after=place + 3, percent=percent, low=low, high=high, level_text=level)
             interval = token.percent and self.at(place + 1).lower in ("ci", "confidence", "-")
             if not (interval or token.lower in ("ci", "confidence", "interval") or token.text in (",", ":", "=", "-")):
                 return None
+            level = f"{token.text}%" if interval else level
             place += 1
         return None
 
