@@ -167,6 +167,10 @@ def _with_spelled(tokens: list[Token]) -> list[Token]:
     place = 0
     while place < len(tokens):
         token = tokens[place]
+        if token.lower in ("none", "zero") and [each.lower for each in tokens[place + 1 : place + 2]] == ["of"]:
+            found.append(Token("number", "0", token.start, token.end, token.lower, 0.0, 0))
+            place += 1
+            continue
         if token.kind == "word" and token.lower.partition("-")[0] in UNITS:
             length, value = spelled_number([each.lower for each in tokens[place : place + 6]])
             if length:

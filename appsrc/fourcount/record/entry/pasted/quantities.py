@@ -121,14 +121,14 @@ class Phrases:
         word = self.at(place).lower
         if word == "out":
             place, word = place + 1, self.at(place + 1).lower
-        if word not in ("of", "among", "in", "from", "amongst"):
+        if word not in ("of", "among", "in", "from", "amongst", "per"):
             return 0
         place += 1
         for _ in range(3):
             if self.at(place).lower in DETERMINERS or (self.at(place).lower == "of" and word != "of"):
                 place += 1
         people = self.at(self._adjectives(place + 1)).lower in PEOPLE
-        if word in ("in", "from") and not people:
+        if (word in ("in", "from", "per") and not people) or (word == "per" and self.at(place).whole in _ROUND_BASES):
             return 0
         return place if self.at(place).kind == "number" and noun.text else 0
 
