@@ -218,6 +218,21 @@ def test_a_form_without_counts_is_one_line(hands: Hands) -> None:
     assert not hands.window.says.family.isVisible()
 
 
+def test_the_groups_of_an_effect_alone_are_named(hands: Hands) -> None:
+    """Who is compared with whom stands under the effect, the index group first, also after a swap."""
+    hands.do("form-effect-only")
+    hands.type("OR 0.49 (0.32 to 0.75)")
+    assert hands.window.printed.rare.check is not None
+    groups = hands.window.printed.rare.check.paper.groups
+    hands.write(groups["first"], "Night lights")
+    hands.write(groups["second"], "Usual care")
+    outcome = hands.window.session.outcome
+    assert (outcome.first_label_text, outcome.second_label_text) == ("Night lights", "Usual care")
+    assert "night lights" in hands.sentence
+    hands.do("swap")
+    assert (groups["first"].text(), groups["second"].text()) == ("Usual care", "Night lights")
+
+
 def test_a_printed_effect_is_carried_to_a_typed_starting_risk(hands: Hands) -> None:
     """An odds ratio alone needs a starting risk, and then draws its picture."""
     hands.do("form-effect-only")
@@ -255,11 +270,23 @@ def test_wrong_input_is_marked_and_the_rest_goes_on(hands: Hands, form: Form) ->
     assert hands.rows != {}
 
 
-@pytest.mark.parametrize("form", list(TYPED))
+def fill(hands: Hands, form: Form) -> None:
+    """Take a form and type something whole into it."""
+    hands.do(f"form-{form}")
+    if form == "effect-only":
+        hands.type("OR 0.49 (0.32 to 0.75)")
+    elif form == "strata":
+        for text in ("38", "412", "70", "409", "old", "10", "100", "20", "100"):
+            hands.type(text)
+            hands.press("Return")
+    else:
+        hands.count(*TYPED[form])
+
+
+@pytest.mark.parametrize("form", FORMS)
 def test_every_row_of_every_form_has_a_working(hands: Hands, form: Form) -> None:
     """Each row opens, and Escape closes it."""
-    hands.do(f"form-{form}")
-    hands.count(*TYPED[form])
+    fill(hands, form)
     hands.do("more")
     for key in list(hands.rows):
         hands.click(hands.row(key))
@@ -274,15 +301,7 @@ def test_copies_hold_every_form_that_is_whole(hands: Hands, form: Form) -> None:
     """Text and table are on the clipboard as soon as anything can be said."""
     from PySide6.QtGui import QGuiApplication
 
-    hands.do(f"form-{form}")
-    if form == "effect-only":
-        hands.type("OR 0.49 (0.32 to 0.75)")
-    elif form == "strata":
-        for text in ("38", "412", "70", "409"):
-            hands.type(text)
-            hands.press("Return")
-    else:
-        hands.count(*TYPED[form])
+    fill(hands, form)
     for command in ("copy-text", "copy-table"):
         QGuiApplication.clipboard().clear()
         hands.do(command)

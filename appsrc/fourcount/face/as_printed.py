@@ -135,7 +135,7 @@ class AsPrinted(FieldsView):
     def field_named(self, key: str) -> TextField | None:
         """The field of this column with a key, its row opened where it has one."""
         self.rare.open_for(key)
-        return next((field for field in self.fields if field.field == key and not field.isHidden()), None)
+        return next((field for field in self.fields if field.field == key and field.isVisible()), None)
 
     @property
     def first_field(self) -> TextField:

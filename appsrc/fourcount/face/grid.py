@@ -212,7 +212,6 @@ class Grid(FieldsView):
         if key == "limits":
             head = self.row_head("limits")
             head.setText(labels.LIMITS)
-            head.setAlignment(RIGHT)
             return head, self._rare_field("limits_level_text")
         return self.headings[key], self.roles[key]
 
@@ -220,7 +219,6 @@ class Grid(FieldsView):
         if field not in self._rare:
             made = QuietField(self._look, field, labels.FIELDS[field], labels.HINTS[field], role="small")
             made.setParent(self)
-            made.setAlignment(Qt.AlignmentFlag.AlignRight)
             self._pass_on(made)
             self._rare[field] = made
         return self._rare[field]
@@ -256,6 +254,10 @@ class Grid(FieldsView):
         for key, field in before.items():
             field.setAlignment(left)
             self.roles[key].setAlignment(left | Qt.AlignmentFlag.AlignVCenter)
+        for made in self._rare.values():
+            made.setAlignment(Qt.AlignmentFlag.AlignRight if upright else left)
+        if "limits" in self.row_heads:
+            self.row_heads["limits"].setAlignment(RIGHT if upright else left | Qt.AlignmentFlag.AlignVCenter)
         self.total_heading.setAlignment(RIGHT if upright else left | Qt.AlignmentFlag.AlignVCenter)
 
     def _small(self, alignment: Qt.AlignmentFlag = Qt.AlignmentFlag.AlignLeft) -> QLabel:

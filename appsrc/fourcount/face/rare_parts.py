@@ -77,7 +77,7 @@ class RareParts(FieldsView):
     def fields_after(self) -> tuple[TextField, ...]:
         """The fields under the table."""
         optional = self.optional.fields if self.optional else ()
-        return (*optional, *((self.check.paper.text, self.check.paper.adjusted) if self.check else ()))
+        return (*optional, *(self.check.paper.fields if self.check else ()))
 
     def show_state(self, outcome: Outcome, findings: OutcomeFindings | None, width: int) -> None:
         """Show what the outcome needs of them."""
@@ -112,6 +112,7 @@ class RareParts(FieldsView):
             self._column.insertWidget(self._place_of_table(), view.paper)
         else:
             view.take_back()
+        view.paper.show()  # another parent hides it until the next event
         if focused:
             view.paper.text.setFocus(Qt.FocusReason.OtherFocusReason)
 
@@ -240,7 +241,7 @@ class RareParts(FieldsView):
         if self.check is None:
             return
         foot = self.optional.last_stop if self.optional else self._stops.foot
-        paper = (self.check.paper.measure, self.check.paper.text, self.check.paper.adjusted)
+        paper = (self.check.paper.measure, *self.check.paper.fields)
         if self._alone:
             chain(self._stops.table, *paper)
             chain(foot, self.check.adopt)

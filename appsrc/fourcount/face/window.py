@@ -187,7 +187,7 @@ class MainWindow(QMainWindow):
         self.printed.show_state(outcome, findings)
         if self.checking:
             self.checking.follow()
-            self._show_check()
+        self._show_check()
         self.says.show_state(record, outcome, findings)
         self.patient.show_state(record, outcome, findings)
         self.cautions.show_state(findings)

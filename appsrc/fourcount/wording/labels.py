@@ -27,7 +27,7 @@ FIELDS = {
     "paper": "Paper says",
     "paper_measure": "What the paper calls it",
     "paper_text": "What the paper prints",
-    "adjusted_for_text": "Adjusted for",
+    "adjusted_for_text": "Adjusted",
     "rows_as": "Rows as",
     "stratum": "Name of row {number}",
 }
@@ -50,7 +50,7 @@ HINTS = {
     "unit_text": "“person-years”",
     "limits_level_text": "95%",
     "paper_text": "“0.54 (0.37 to 0.78)”",
-    "adjusted_for_text": "nothing, or “age, sex”",
+    "adjusted_for_text": "for “age, sex”, or not at all",
     "stratum": "“under 65”",
     "count_of_percent": "= {count}",
 }

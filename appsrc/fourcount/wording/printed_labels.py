@@ -12,6 +12,10 @@ PAPER_MEASURES = {
 }
 """What a paper may call the result that it prints."""
 
+COMPARING = "Comparing"
+COMPARED_WITH = "with"
+COMPARED_HINTS = {"first": "index group", "second": "reference"}
+
 ROWS_AS = {True: "rows 38 of 412", False: "rows 38 · 374"}
 
 PAIR_NAMES = {

@@ -8,9 +8,9 @@ from PySide6.QtWidgets import QGridLayout, QHBoxLayout
 from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.look import Look
 from fourcount.face.text import Words
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import Outcome, Position
 from fourcount.wording import labels
-from fourcount.wording.printed_labels import PAPER_MEASURES
+from fourcount.wording.printed_labels import COMPARED_HINTS, COMPARED_WITH, COMPARING, PAPER_MEASURES
 
 
 class PaperSays(FieldsView):
@@ -32,6 +32,14 @@ class PaperSays(FieldsView):
         self.adjusted = TextField(
             look, "adjusted_for_text", labels.FIELDS["adjusted_for_text"], labels.HINTS["adjusted_for_text"]
         )
+        self.compared_name = Words(look, "body", "muted", COMPARING, wraps=False)
+        self.groups = {
+            position: TextField(
+                look, f"{position}_label_text", labels.FIELDS["label"].format(group=name), COMPARED_HINTS[position]
+            )
+            for position, name in labels.GROUP_NAMES.items()
+        }
+        self.compared_with = Words(look, "body", "muted", COMPARED_WITH, wraps=False)
         self._rows = QGridLayout(self)
         self._rows.setContentsMargins(0, 0, 0, 0)
         self._rows.setColumnStretch(1, 1)
@@ -42,17 +50,36 @@ class PaperSays(FieldsView):
         self._rows.addLayout(self._line, 0, 1)
         self._rows.addWidget(self.adjusted_name, 1, 0)
         self._rows.addWidget(self.adjusted, 1, 1)
-        self._pass_on(self.text, self.adjusted)
+        self._compared = QHBoxLayout()
+        self._compared.addWidget(self.groups["first"], 1)
+        self._compared.addWidget(self.compared_with)
+        self._compared.addWidget(self.groups["second"], 1)
+        self._rows.addWidget(self.compared_name, 2, 0)
+        self._rows.addLayout(self._compared, 2, 1)
+        self._pass_on(*self.fields)
         self.measure.chosen.connect(self.measure_chosen)
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
+
+    @property
+    def fields(self) -> tuple[TextField, ...]:
+        """The text fields in reading order."""
+        return (self.text, self.adjusted, *self.groups.values())
 
     def show_state(self, outcome: Outcome, alone: bool) -> None:
         """Show what was typed; ``alone`` where no counts stand beside it."""
         self.measure.show_choice(outcome.paper_measure)
         self.text.show_text(outcome.paper_text)
         self.adjusted.show_text(outcome.adjusted_for_text)
-        for widget in (self.adjusted_name, self.adjusted):
+        positions: tuple[Position, Position] = ("first", "second")
+        for field, position in zip(
+            self.groups.values(), positions if outcome.index_group == "first" else positions[::-1], strict=True
+        ):
+            field.field = f"{position}_label_text"  # the index group stands first
+            field.show_text(getattr(outcome, field.field))
+        for widget in (
+            self.adjusted_name, self.adjusted, self.compared_name, self.compared_with, *self.groups.values(),
+        ):  # fmt: skip
             widget.setVisible(alone)
 
     def align(self, width: int) -> None:
@@ -63,3 +90,4 @@ class PaperSays(FieldsView):
         self._rows.setHorizontalSpacing(self._look.px(12))
         self._rows.setVerticalSpacing(self._look.px(4))
         self._line.setSpacing(self._look.px(12))
+        self._compared.setSpacing(self._look.px(8))
