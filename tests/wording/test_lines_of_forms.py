@@ -101,6 +101,14 @@ def test_the_strips_of_rates_are_in_the_unit_that_is_shown():
     assert lines_of(person_time())["rate_ratio"].high == pytest.approx(0.798, abs=1e-3)
 
 
+def test_a_rate_below_none_is_said_to_be_the_formulas():
+    """Wald's limit of two events stands as papers print it, with its sign."""
+    line = lines_of(person_time((2, 100, 7, 100)), Choices(family="textbook"))["rate_index"]
+    assert (line.estimate, line.interval) == ("2.0", "−0.8 to 4.8")
+    assert line.note == "the bare formula reaches below 0"
+    assert lines_of(person_time((2, 100, 7, 100)))["rate_index"].note == ""
+
+
 def test_printed_risks_keep_the_level_of_their_print():
     """The level chosen for the record does not change what was printed at another."""
     outcome, choices = at_time(level="90%"), Choices(level=0.99)

@@ -85,12 +85,12 @@ def difference_interval(interval: AnyInterval, estimate: float | Gap) -> str:
 
 
 def rate_interval(interval: AnyInterval, estimate: float | Gap, per: int) -> str:
-    """Rates for ``per`` units of person-time: ``6.5 to 12.7``, with the decimals of the estimate."""
+    """Rates for ``per`` units of person-time: ``6.5 to 12.7``; the bare formula’s limit below none has its sign."""
     if isinstance(interval, Gap):
         return ""
 
     def write(x: float) -> str:
-        return _rate(x, estimate, per)
+        return f"{numbers.MINUS if x < 0 else ''}{_rate(x, estimate, per)}"
 
     return f"{_limit(interval.low, write)}{numbers.TO}{_limit(interval.high, write)}"
 

@@ -2,17 +2,19 @@
 
 from __future__ import annotations
 
+import math
+
 from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, Rates
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import names, numbers
+from fourcount.wording import limits, names, numbers
 from fourcount.wording.form import given, measure_of
-from fourcount.wording.half_added import half_added
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.unpaired import relative_note
-from fourcount.wording.lines.words import method_word
+from fourcount.wording.lines.words import KINDS, method_word
 from fourcount.wording.person_time import per_units, time_in, unit_sum
 
+PAST_NONE = "the bare formula reaches below 0"
 RATES_ORDER = ("rate_difference", "rate_reference", "rate_index", "rate_ratio")
 
 
@@ -41,7 +43,8 @@ def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choice
         return blank_line(key, name)
     per = per_units(rates)
     detail = f"{_counts(key, rates, outcome)}{method_word(measure.method, choices)}"
-    notes = (half_added(measure), relative_note(measure) if key == "rate_ratio" else "")
+    below = PAST_NONE if KINDS[key] == "rate" and limits.beyond(measure.interval, 0.0, math.inf) else ""
+    notes = (below, relative_note(measure) if key == "rate_ratio" else "")
     return figure_line(key, name, measure, detail=detail, notes=notes, per=1 if key == "rate_ratio" else per)
 
 

@@ -46,7 +46,6 @@ METHOD_WORDS = {
     "bonett-price": "score",
     "conditional-mid-p": "mid-P",
     "conditional-exact": "exact",
-    "mid-p": "mid-P",
     "wilson": "score",
     "clopper-pearson": "exact",
     "wald": "textbook",
@@ -54,13 +53,10 @@ METHOD_WORDS = {
     "score": "score",
     "exact": "exact",
     "miettinen-nurminen": "score",
-    "katz": "textbook",
-    "woolf": "textbook",
     "sato": "Mantel–Haenszel",
     "greenland-robins": "Mantel–Haenszel",
     "robins-breslow-greenland": "Mantel–Haenszel",
     "square-and-add": "from the printed limits",
-    "square-and-add-ratio": "from the printed limits",
     "printed": "as printed",
 }
 """A method in the word that its line has room for; its name in full stands in the working."""

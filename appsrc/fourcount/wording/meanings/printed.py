@@ -2,10 +2,10 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PrintedFigure
+from fourcount.appraisal.findings import Figure, OutcomeFindings, PrintedFigure
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import limits, lines, names, numbers
+from fourcount.wording import lines, names, numbers
 from fourcount.wording.form import given
 from fourcount.wording.meanings import unpaired
 from fourcount.wording.meanings.parts import given_estimate, no_interval, spanned, times, with_interval
@@ -88,8 +88,3 @@ def _but(key: str) -> str:
         "risk_difference": NO_START,
         "rate_difference": NO_RATES,
     }[key]
-
-
-def relative_of(figure: Figure) -> str:
-    """``relative reduction of 46%`` of a printed ratio, or ""."""
-    return "" if isinstance(figure.estimate, Gap) else limits.relative(figure.estimate, " of ")
