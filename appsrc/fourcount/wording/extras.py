@@ -81,6 +81,7 @@ POPULATION_NOTE = (
     "The share of all events here that would not have been, if the ratio is all cause and people elsewhere are exposed "
     "as these were. {not_one}"
 )
+LOG = "log"
 NOT_ONE = "It does not tell whose events those were."
 CLUSTERS_NOTE = (
     "intervals and p rest on the counts divided by it; the risks stay. It is as good as the correlation that was typed"
@@ -200,7 +201,8 @@ def _attributable(key: str, figure: Figure, case: _Case) -> MeasureLine:
     note = (EXPOSED_NOTE if key == "attributable_exposed" else POPULATION_NOTE).format(not_one=NOT_ONE)
     below = _fraction_interval(figure.interval)
     shown = structs.replace(figure, interval=Interval(low=0.0, high=1.0)) if below else figure
-    line = figure_line(key, NAMES[key], shown, detail=case.choices.family, notes=(note,), group="more", kind="")
+    detail = LOG if figure.method == "population-fraction" else lines.family_name("risk_ratio", case.choices)
+    line = figure_line(key, NAMES[key], shown, detail=detail, notes=(note,), group="more", kind="")
     return replace(line, interval=below or line.interval, low=None, estimate_value=None, high=None)
 
 
