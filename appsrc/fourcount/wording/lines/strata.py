@@ -37,13 +37,8 @@ ORDER = (
 CASE_CONTROL_ORDER = ("pooled_odds_ratio", "odds_ratio", *(key for key in ORDER if not key.endswith("odds_ratio")))
 CRUDE = "{name}, crude"
 POOLED = "{name}, pooled"
-PARTS = (
-    "the crude one lies more than a tenth away from it, or on the other side of no effect: confounding by what the "
-    "strata differ in can do that"
-)
-ODDS_PART = (
-    "an odds ratio can do it without any confounding, so judge by the difference or the risk ratio if there is one"
-)
+PARTS = "the crude one lies more than a tenth away, or across no effect: confounding can do that"
+ODDS_PART = "an odds ratio can do it without any confounding, so judge by the difference or the risk ratio"
 STRATUM_KEY = "stratum."
 
 
