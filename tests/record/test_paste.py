@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from fourcount.record.entry.cell import read_cell
@@ -74,6 +74,33 @@ def held(pasted: Pasted | None) -> None:
 @given(TEXTS)
 def test_any_paste_is_understood_or_not_and_never_raises(text: str) -> None:
     """Reading a paste is total, and whatever it gives can stand in the cells."""
+    held(read_paste(text))
+
+
+@given(
+    st.sampled_from([text for text, _ in [*cases("blocks.txt"), *cases("sentences.txt")]]),
+    st.lists(st.tuples(st.integers(0, 300), st.integers(0, 3), PIECES), min_size=1, max_size=6),
+)
+@settings(max_examples=400)
+def test_a_damaged_paste_is_understood_or_not_and_never_raises(text: str, changes: list[tuple[int, int, str]]) -> None:
+    """A table or a sentence with pieces lost or put in is read without an error, as something a cell can hold."""
+    for place, length, piece in changes:
+        text = text[:place] + piece + text[place + length :]
+    held(read_paste(text))
+
+
+@pytest.mark.parametrize(
+    "text",
+    [
+        "Lamp 12\nTorch n 412",
+        "12 (1,301,204.5%)\t38\n5 (3%)\t70",
+        "Hospital: 1.8% (37/2\n041) with spray; 2.9% (59/2038) with saline",
+        "Arm\tTime at risk, person-years\nLamp\t38.5\t.05\nTorch\t70.5\t3.3",
+        "Men\nLamp\t1\t2\nP = 0.3\nWomen\nLamp\t3\t4\nRR 2 (1 to 3)",
+    ],
+)
+def test_what_once_raised_is_answered(text: str) -> None:
+    """Texts on which an earlier reading failed stay readable."""
     held(read_paste(text))
 
 

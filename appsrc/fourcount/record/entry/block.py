@@ -12,7 +12,7 @@ from fourcount.record.entry.pasted.groups import Understood, agrees, two_groups
 from fourcount.record.entry.pasted.headings import is_sum
 from fourcount.record.entry.pasted.matrix import Matrix, matrix_of
 from fourcount.record.entry.pasted.pair_table import pair_table
-from fourcount.record.entry.pasted.quantities import Quantity
+from fourcount.record.entry.pasted.quantities import Quantity, beside
 from fourcount.record.entry.pasted.strata_rows import Strata, strata_of
 from fourcount.record.entry.printed import read_paper
 from fourcount.record.entry.readings import Pasted, PastedGroup
@@ -148,7 +148,7 @@ def _groups(found: Understood) -> tuple[PastedGroup, ...]:
         if quantity.events is None:
             left += "%"
         elif quantity.percent is not None and not agrees(quantity, found):
-            left += f" ({quantity.percent.text}%)"
+            left = beside(left, quantity.percent)
         groups.append(PastedGroup(left_text=left, right_text=_right(quantity, found, place), label=_heading(label)))
     return tuple(groups)
 

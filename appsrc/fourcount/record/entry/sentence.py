@@ -11,7 +11,7 @@ import msgspec
 from fourcount.record.entry.pasted.doubts import PASTE_DOUBTS
 from fourcount.record.entry.pasted.event_words import event_words, time_span
 from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
-from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity, gives
+from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity, beside, gives
 from fourcount.record.entry.pasted.totals import shared_total, with_totals
 from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, INTRODUCERS, LINKING, NOT_PEOPLE, PEOPLE
 from fourcount.record.entry.printed import named_figures
@@ -286,7 +286,7 @@ def _group(form: Form, quantity: Quantity, label: str) -> PastedGroup:
     if form in ("percent-of-total", "risk-at-time"):
         left += "%"
     elif quantity.percent is not None and not _agrees(quantity):
-        left += f" ({quantity.percent.text}%)"
+        left = beside(left, quantity.percent)
     if form == "risk-at-time" and quantity.low and quantity.high:
         right = f"{quantity.low.text} to {quantity.high.text}%"
     else:

@@ -66,6 +66,7 @@ class Print(msgspec.Struct, frozen=True):
 
     def piece(self, first: int, after: int) -> str:
         """The text from one token up to, but without, another."""
+        after = min(after, len(self.tokens))
         if first >= after:
             return ""
         return self.shown[self.tokens[first].start : self.tokens[after - 1].end].strip()
@@ -91,7 +92,8 @@ def as_sentence(printed: Print) -> Print:
     found: list[Token] = []
     for token in printed.tokens:
         last = found[-1] if found else None
-        if last and last.kind == token.kind == "number" and _continues(last, token):
+        spaced = last is not None and printed.shown[last.end : token.start] == " "
+        if last and spaced and last.kind == token.kind == "number" and _continues(last, token):
             text = printed.shown[last.start : token.start] + token.text
             whole = (last.whole or 0) * 1000 + (token.whole or 0)
             found[-1] = Token("number", text, last.start, token.end, "", float(whole), whole, 0, token.percent)
@@ -104,7 +106,7 @@ def _continues(last: Token, token: Token) -> bool:
     if last.whole is None or token.whole is None or last.percent or last.text[0] == "0":
         return False
     head = len(last.text) <= 3 or " " in last.text
-    return head and len(token.text) == 3 and token.start == last.end + 1 and last.whole < 10**9 and not last.lower
+    return head and len(token.text) == 3 and last.whole < 10**9 and not last.lower
 
 
 def in_ascii(shown: str) -> str:

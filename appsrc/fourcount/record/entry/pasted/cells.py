@@ -39,6 +39,12 @@ class Cell(msgspec.Struct, frozen=True, kw_only=True):
     @property
     def count(self) -> Token | None:
         """A whole number with nothing but a percentage beside it."""
+        amount = self.amount
+        return amount if amount and amount.whole is not None else None
+
+    @property
+    def amount(self) -> Token | None:
+        """A count, or person-time, which may have decimals."""
         quantity = self.quantity
         return quantity.events if quantity and not quantity.complete else None
 
@@ -201,7 +207,8 @@ def _cell_at(printed: Print, phrases: Phrases, place: int) -> tuple[Cell | None,
     start = place if token.lower == "n" else place + 1
     total = _total(tokens[start : start + 3]) if token.lower == "n" or token.text in OPENING else None
     if total:
-        return Cell(text=printed.piece(place, start + 3), total=total), start + 3
+        after = tokens.index(total, start) + 1
+        return Cell(text=printed.piece(place, after), total=total), after
     if token.lower == "p" or token.text in ("<", ">"):
         return _p(printed, place)
     if token.kind != "number":

@@ -108,11 +108,12 @@ def _kind(quantity: Quantity) -> tuple[bool, bool, bool]:
 
 def _counted(matrix: Matrix, roles: Sequence[Role]) -> Understood | None:
     """Columns of counts, told apart by their headings, else by sums, else by their order."""
-    columns = [place for place in range(len(matrix.heads)) if all(row[place].count for row in matrix.rows)]
+    amounts = [place for place in range(len(matrix.heads)) if all(row[place].amount for row in matrix.rows)]
+    timed = [place for place in amounts if roles[place] == "time" or _unit(matrix, place)]
+    columns = [place for place in amounts if all(row[place].count for row in matrix.rows)]
     columns = [place for place in columns if not (is_sum(matrix.heads[place].label) and roles[place] != "total")]
     if not columns:
         return None
-    timed = [place for place in columns if roles[place] == "time" or _unit(matrix, place)]
     if timed:
         events = [place for place in columns if place not in timed and roles[place] != "total"]
         return _timed(matrix, events, timed[0])

@@ -47,6 +47,7 @@ class Matrix(msgspec.Struct, frozen=True, kw_only=True):
             rows=tuple(tuple(self.rows[row][column] for column in kept) for row in rows),
             labels=tuple(self.labels[row] for row in rows),
             heads=tuple(self.heads[column] for column in kept),
+            sections=tuple((label, sum(row < start for row in rows)) for label, start in self.sections),
         )
 
 
@@ -158,7 +159,7 @@ def _aligned(row: Sequence[Cell], lead: int, width: int) -> list[Cell] | None:
         cells = cells[len(cells) - width :]
     elif len(cells) > 1 and lead and cells[0].empty:
         cells = cells[lead:]
-        if width % len(cells):
+        if cells and width % len(cells):
             cells += [EMPTY] * (width - len(cells))
     told = [cell for cell in cells if not cell.empty]
     if len(cells) < width or (len(told) < width and told and cells[0] is told[0]):

@@ -16,7 +16,7 @@ from fourcount.record.entry.pasted.vocabulary import (
     VERBS,
     time_of_people,
 )
-from fourcount.record.entry.percent import PrintedPercent, rounds_to
+from fourcount.record.entry.percent import PrintedPercent, printed_percent, rounds_to
 from fourcount.record.entry.tokens import Token
 
 OPENING = ("(", "[", "{")
@@ -313,10 +313,18 @@ class Phrases:
 
 def gives(percent: Token, events: int, total: int) -> bool:
     """Whether so many of so many are the printed percentage."""
-    value = Fraction(percent.text.replace(",", ".").replace("\u00b7", ".").lstrip("-") or "0")
+    if not 0 <= percent.value <= 100:
+        return False
+    value = Fraction(f"{percent.value:.{percent.decimals}f}")
     return rounds_to(PrintedPercent(value=value, decimals=percent.decimals), events, total)
 
 
 def nearly_gives(percent: Token, events: int, total: int) -> bool:
     """Whether so many of so many are about the printed percentage, so that it may be a slip of print."""
     return total > 0 and events <= total and abs(100 * events / total - percent.value) <= max(1.0, 0.1 * percent.value)
+
+
+def beside(count: str, percent: Token) -> str:
+    """A count with its percentage as a cell takes both; the count alone where no cell could hold the percentage."""
+    text = percent.text if percent.text[:1].isdigit() else f"0{percent.text}"
+    return f"{count} ({text}%)" if printed_percent(text) else count

@@ -47,14 +47,15 @@ def _wide(matrix: Matrix) -> Strata | None:
     if len(matrix.heads) != 4 or any(head.total for head in matrix.heads):
         return None
     rows = [row for row in range(len(matrix.rows)) if not is_sum(matrix.labels[row].label)] or [0]
-    if any(cell.count is None for row in rows for cell in matrix.rows[row]):
+    if any(cell.count is None for row in rows for cell in matrix.rows[row][::2]):
         return None
     groups = (_shared(matrix.heads[0], matrix.heads[1]), _shared(matrix.heads[2], matrix.heads[3]))
     roles = [role_of(_without(head.label, groups[place // 2])) for place, head in enumerate(matrix.heads)]
     timed = roles[1] == roles[3] == "time" or any(
         cell.quantity and cell.quantity.unit for row in rows for cell in matrix.rows[row][1::2]
     )
-    if len(rows) > 1 and timed:
+    seconds = [cell.amount if timed else cell.count for row in rows for cell in matrix.rows[row][1::2]]
+    if (len(rows) > 1 and timed) or not all(seconds):
         return None
     others = roles[1] == roles[3] == "others" or any(
         _whole(matrix, row, place) > _whole(matrix, row, place + 1) for row in rows for place in (0, 2)
@@ -87,7 +88,7 @@ def _table(matrix: Matrix, row: int, groups: tuple[str, str], second: str) -> Un
     pair, apart = [], []
     for place in (0, 2):
         quantity = cells[place].quantity or Quantity(first=0, after=1)
-        whole = cells[place + 1].count
+        whole = cells[place + 1].amount
         changes = {"total": whole} if second == "total" else {"time": whole} if second == "time" else {}
         pair.append(msgspec.structs.replace(quantity, **changes))
         apart.append(whole)
