@@ -74,8 +74,8 @@ FRAGILITY_NOTE = (
 )
 LOST = "{lost} were lost"
 NOT_SAID = "how many were lost was not typed"
-OVERTURNED = "here the interval of the difference tells something else about no effect than without the lost"
-TOO_NARROW = "as if those lost had been seen, so the interval is too narrow"
+OVERTURNED = "here the interval tells something else about no effect"
+TOO_NARROW = "interval too narrow, as if the lost had been seen"
 EXPOSED_NOTE = "The share of the events of the exposed that would not have been, if the ratio is all cause. {not_one}"
 POPULATION_NOTE = (
     "The share of all events here that would not have been, if the ratio is all cause and people elsewhere are exposed "
