@@ -1,4 +1,4 @@
-"""Where the cursor goes: to the field that a command names, back to what an undo changed, and always into view."""
+"""Where the cursor goes: to the field that a command names, and back to what an undo changed."""
 
 from __future__ import annotations
 
@@ -76,12 +76,6 @@ class CursorKeeper(QObject):
             before.setFocus(Qt.FocusReason.OtherFocusReason)
         elif before is not None:
             self.to_first_cell()
-
-    def show_focus(self) -> None:
-        """Bring what has the focus into view."""
-        focus = self._window.focusWidget()
-        if focus and self._window.page.isAncestorOf(focus):
-            self._window.page_scroll.ensureWidgetVisible(focus)
 
     def _go_to(self, field: TextField) -> None:
         field.setFocus(Qt.FocusReason.ShortcutFocusReason)

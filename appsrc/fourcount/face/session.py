@@ -6,7 +6,6 @@ from typing import TYPE_CHECKING, NamedTuple
 
 from PySide6.QtCore import QObject, Signal
 
-from fourcount.record import editing
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 
@@ -69,6 +68,8 @@ class Session(QObject):
 
     def edit_text(self, field: str, text: str) -> None:
         """Take the text of a field at a keystroke."""
+        from fourcount.record import editing  # no first paint needs it
+
         if field in RECORD_FIELDS:
             record = editing.edit_record_text(self.record, field, text)
         else:
@@ -135,6 +136,8 @@ class Session(QObject):
             self.changed.emit(self.record, findings)
 
     def _with(self, outcome: Outcome) -> Record:
+        from fourcount.record import editing
+
         return editing.with_outcome(self.record, self.view, outcome)
 
     def _take(self, record: Record) -> None:

@@ -15,8 +15,6 @@ from fourcount.face import dialogs
 from fourcount.face.as_printed import AsPrinted
 from fourcount.face.cautions_strip import CautionsStrip
 from fourcount.face.columns import Page, PageScroll
-from fourcount.face.commands import Commands
-from fourcount.face.cursor_keeper import CursorKeeper
 from fourcount.face.for_one_patient import ForOnePatient
 from fourcount.face.header import Banner, Hairline, Header
 from fourcount.face.later import Later
@@ -24,7 +22,6 @@ from fourcount.face.look import APPEARANCES, Look
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
-from fourcount.record import editing
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
@@ -33,6 +30,8 @@ from fourcount.wording.standing import STANDING
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
     from fourcount.face.checking import Checking
+    from fourcount.face.commands import Commands
+    from fourcount.face.cursor_keeper import CursorKeeper
 
 FIRST_SIZE = QSize(1280, 800)
 ROOM_FOR_A_FRAME = QSize(0, 40)
@@ -49,6 +48,9 @@ class MainWindow(QMainWindow):
 
     first_painted = Signal()
     numbers_ready = Signal()
+    commands: Commands
+    cursor_keeper: CursorKeeper
+    checking: Checking | None = None
 
     def __init__(self, session: Session, look: Look, settings: Settings, later: Later) -> None:
         super().__init__()
@@ -58,17 +60,13 @@ class MainWindow(QMainWindow):
         self._later = later
         self._painted = False
         self._shown: Record | None = None
-        self.commands = Commands(session, look, self)
-        self.checking: Checking | None = None
         self.actions_by_key = commands_table.make_actions(self)
         self.header = Header(look)
         self.banner = Banner(look)
         self.printed = AsPrinted(look, self.actions_by_key)
         self.says = WhatItSays(look, self.actions_by_key)
         self.patient = ForOnePatient(look, self.actions_by_key)
-        self.commands.picture = self.patient.picture
         self.cautions = CautionsStrip(look, STANDING)
-        self.cursor_keeper = CursorKeeper(self)
         self._build()
         self._connect_all()
         self._show_state(session.record, None)
@@ -131,7 +129,18 @@ class MainWindow(QMainWindow):
             view.edited.connect(self.session.edit_text)
             view.edited.connect(self._on_edited)
             view.left.connect(self.session.end_run)
-        do, go = self.commands, self.cursor_keeper
+        self.session.changed.connect(self._show_state)
+        self._later.arrived.connect(self._on_figures_arrived)
+        self._later.loaded.connect(self._on_libraries_loaded)
+        self.look.changed.connect(self._on_look_changed)
+        application = QApplication.instance()
+        if isinstance(application, QApplication):
+            application.focusChanged.connect(self._on_focus_changed)
+        self.first_painted.connect(self._on_first_painted)
+        self._appearances.triggered.connect(self._on_appearance_chosen)
+
+    def _connect_commands(self, do: Commands, go: CursorKeeper) -> None:
+        """The wiring of all that a hand can do but type: nobody can before the first paint."""
         self.printed.design.chosen.connect(do.choose_design)
         self.printed.welcome.chosen.connect(do.choose_welcome)
         self.printed.form.chosen.connect(do.choose_form)
@@ -149,16 +158,7 @@ class MainWindow(QMainWindow):
         self.patient.effect_chosen.connect(do.choose_effect)
         do.cell_wanted.connect(go.to_first_cell)
         do.noticed.connect(self.header.tell)
-        self.session.changed.connect(self._show_state)
         self.session.focus_wanted.connect(go.focus_wanted)
-        self._later.arrived.connect(self._on_figures_arrived)
-        self._later.loaded.connect(self._on_libraries_loaded)
-        self.look.changed.connect(self._on_look_changed)
-        application = QApplication.instance()
-        if isinstance(application, QApplication):
-            application.focusChanged.connect(self._on_focus_changed)
-        self.first_painted.connect(self._on_first_painted)
-        self._appearances.triggered.connect(self._on_appearance_chosen)
         handlers = {
             "new": do.new_table, "example": do.open_example, "quit": self.close, "undo": self.session.undo,
             "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
@@ -251,6 +251,7 @@ class MainWindow(QMainWindow):
 
     def _has_work(self) -> bool:
         """Whether the window holds typed text that is not just the worked example."""
+        from fourcount.record import editing
         from fourcount.wording.example import worked_example
 
         record = self.session.record
@@ -262,15 +263,25 @@ class MainWindow(QMainWindow):
         from fourcount.assets_folder import assets_folder
 
         self.setWindowIcon(QIcon(str(assets_folder() / "fourcount.png")))
-        from fourcount.face.checking import Checking
-
+        self._take_commands()
         gc.enable()
-        self.actions_by_key |= commands_table.add_forms(self, self.menus["forms"])
-        self.checking = Checking(self.session, self._later, self)
-        self.checking.changed.connect(self._show_check)
         self.session.wake()
         self.commands.tell_unusual_choices()
         self._later.load()
+
+    def _take_commands(self) -> None:
+        """Make what acts on the record and moves the cursor, which no first paint needs, and wire it."""
+        from fourcount.face.checking import Checking
+        from fourcount.face.commands import Commands
+        from fourcount.face.cursor_keeper import CursorKeeper
+
+        self.commands = Commands(self.session, self.look, self)
+        self.commands.picture = self.patient.picture
+        self.cursor_keeper = CursorKeeper(self)
+        self.checking = Checking(self.session, self._later, self)
+        self.checking.changed.connect(self._show_check)
+        self.actions_by_key |= commands_table.add_forms(self, self.menus["forms"])
+        self._connect_commands(self.commands, self.cursor_keeper)
 
     def _on_libraries_loaded(self) -> None:
         self.session.announce()
@@ -318,10 +329,16 @@ class MainWindow(QMainWindow):
         for menu in self.menus.values():
             menu.setFont(self.look.font("body"))
         self.update()
-        QTimer.singleShot(0, self.cursor_keeper.show_focus)
+        QTimer.singleShot(0, self._show_focus)
 
     def _on_edited(self, _field: str, _text: str) -> None:
-        self.cursor_keeper.show_focus()
+        self._show_focus()
 
     def _on_focus_changed(self, _before: QWidget | None, _now: QWidget | None) -> None:
-        self.cursor_keeper.show_focus()
+        self._show_focus()
+
+    def _show_focus(self) -> None:
+        """Bring what has the focus into view."""
+        focus = self.focusWidget()
+        if focus and self.page.isAncestorOf(focus):
+            self.page_scroll.ensureWidgetVisible(focus)
