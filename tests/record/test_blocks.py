@@ -53,3 +53,11 @@ def test_a_percentage_that_disagrees_is_listed_and_kept() -> None:
     assert pasted is not None
     assert [group.left_text for group in pasted.groups] == ["38 (9.5%)", "70"]
     assert pasted.ambiguous == ("percent-disagrees",)
+
+
+def test_a_column_of_something_else_is_left_out_and_listed() -> None:
+    """A mean age beside the counts is no percentage of them: it is left out, and that is listed."""
+    pasted = read_block("Arm\tEvents\tTotal\tMean age\nLamp\t38\t412\t65.2\nTorch\t70\t409\t64.8")
+    assert pasted is not None
+    assert [(group.left_text, group.right_text) for group in pasted.groups] == [("38", "412"), ("70", "409")]
+    assert pasted.ambiguous == ("left-out",)

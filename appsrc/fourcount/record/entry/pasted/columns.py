@@ -65,7 +65,7 @@ def with_percentages(matrix: Matrix) -> Matrix:
         if not told or any(row[column].filled and not percent for row, percent in zip(rows, percents, strict=True)):
             continue
         target = _target(rows, percents, matrix.heads, [place for place in range(column) if place not in gone])
-        if target is None:
+        if target is None or not _is_percentage(matrix, percents, column, target):
             continue
         for row, percent in zip(rows, percents, strict=True):
             quantity = row[target].quantity
@@ -77,6 +77,24 @@ def with_percentages(matrix: Matrix) -> Matrix:
     kept = [place for place in range(len(matrix.heads)) if place not in gone]
     whole = msgspec.structs.replace(matrix, rows=tuple(tuple(row) for row in rows))
     return msgspec.structs.replace(whole.only(range(len(rows)), kept), rows=_decimals_told(rows, kept, matrix.heads))
+
+
+def _is_percentage(matrix: Matrix, percents: Sequence[Token | None], column: int, target: int) -> bool:
+    """Whether numbers are percentages by sign or heading, or are what the counts give; "mean age" is neither."""
+    head = matrix.heads[column].label
+    if not head or role_of(head) == "percent" or all(percent.percent for percent in percents if percent):
+        return True
+    for row, label, percent in zip(matrix.rows, matrix.labels, percents, strict=True):
+        quantity = row[target].quantity
+        wholes = [cell.count for cell in row] + [label.total, quantity.total if quantity else None]
+        events = quantity.events if quantity else None
+        if (
+            percent
+            and events
+            and not any(whole and nearly_gives(percent, events.whole or 0, whole.whole or 0) for whole in wholes)
+        ):
+            return False
+    return True
 
 
 def _decimals_told(

@@ -54,6 +54,7 @@ def two_groups(matrix: Matrix) -> Understood | None:
     checked = [each for each in pair if each.percent and each.events and (each.total or found.others)]
     agreeing = len(checked) if sampled else sum(agrees(each, found) for each in checked)
     doubts = found.doubts + (("percent-disagrees",) if agreeing < len(checked) else ())
+    doubts += ("left-out",) if _left_out(matrix, found) else ()
     score += found.score + agreeing - 2 * (len(checked) - agreeing)
     if sampled:
         pair = (msgspec.structs.replace(pair[0], percent=None), msgspec.structs.replace(pair[1], percent=None))
@@ -62,13 +63,25 @@ def two_groups(matrix: Matrix) -> Understood | None:
     return msgspec.structs.replace(found, labels=names, doubts=doubts, score=score)
 
 
+def _left_out(matrix: Matrix, found: Understood) -> bool:
+    """Whether a column of numbers with decimals or percentages is neither used nor what the counts give."""
+    if found.form == "percent-of-total":
+        return False
+    for column in range(len(matrix.heads)):
+        percents = [row[column].percent for row in matrix.rows]
+        pairs = zip(found.quantities, percents, strict=True)
+        if all(percents) and not all(agrees(msgspec.structs.replace(each, percent=one), found) for each, one in pairs):
+            return True
+    return False
+
+
 def agrees(quantity: Quantity, found: Understood) -> bool:
     """Whether a printed percentage is what the count gives of its group."""
     if quantity.percent is None or quantity.events is None:
         return True
     whole = quantity.total.whole if quantity.total else None
     if whole is None and found.others:
-        other = found.others[found.quantities.index(quantity)]
+        other = found.others[[each.events for each in found.quantities].index(quantity.events)]
         whole = (quantity.events.whole or 0) + (other.whole or 0)
     return whole is None or gives(quantity.percent, quantity.events.whole or 0, whole)
 
