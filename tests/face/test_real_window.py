@@ -23,7 +23,7 @@ def test_a_table_is_answered_by_keyboard_alone(hands: Any) -> None:
     assert "with usual care" in hands.sentence
     hands.press("Shift+Tab", 10)
     assert hands.focus is hands.window.printed.design
-    hands.press("End")
+    hands.press("Down", 3)
     assert "The odds" in hands.sentence
     hands.press("Home")
     assert hands.sentence.startswith("Of 100 people with usual care about 17")
@@ -35,11 +35,31 @@ def test_a_table_is_answered_by_keyboard_alone(hands: Any) -> None:
     hands.type("12%")
     assert hands.window.patient.picture.picture.words.without.number == "12 in 100"
     full = hands.window.session.record
-    hands.press("Ctrl+Z", 11)
+    hands.press("Ctrl+Z", 13)
     assert hands.window.session.record == empty
     assert hands.texts == ("", "", "", "")
-    hands.press("Ctrl+Shift+Z", 11)
+    hands.press("Ctrl+Shift+Z", 13)
     assert hands.window.session.record == full
+
+
+def test_every_form_is_reached_by_its_key(hands: Any, qtbot: Any) -> None:
+    """Function keys take the forms; a table is typed, pasted and checked without a mouse."""
+    hands.do("form-percent-of-total")
+    for text in ("9.2%", "412", "17.1%", "409"):
+        hands.type(text)
+        hands.press("Return")
+    assert hands.rows["risk_ratio"].startswith("Risk ratio: 0.54")
+    hands.do("paper")
+    hands.type("0.49 (0.32 to 0.75)")
+    qtbot.waitUntil(lambda: any("Check the name" in text for text in hands.window.printed.rare.check.sentences))
+    hands.do("form-strata")
+    hands.press("Ctrl+Return")
+    assert hands.field == "strata.2.label_text"
+    QGuiApplication.clipboard().setText("38\t412\n70\t409")
+    hands.press("Ctrl+V")
+    assert hands.window.printed.rare.panel.isVisible()
+    hands.press("Escape")
+    assert hands.field == "strata.2.label_text"
 
 
 def test_the_picture_reaches_the_clipboard(example: Any) -> None:
