@@ -2,19 +2,25 @@
 
 from __future__ import annotations
 
+import json
+import re
+
 import pytest
 from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from copies import NUMBER, letter, on_screen, sheet_of, table_of
+from drawn_forms import outcomes
 from forms import EVERY_FORM, at_time, effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
+from fourcount.publish.contract import contract
 from fourcount.publish.listing import WIDTH
 from fourcount.publish.plain_text import one_line
-from fourcount.record.paper import Choices
+from fourcount.record.paper import FAMILIES, Choices
 from fourcount.wording.cautions import STANDING, STANDING_FULL, caution_text
 from fourcount.wording.exports import SHEET_HEAD
 
+RAW = re.compile(r"\bnan\b|None|\binf\b|Gap\(|Interval\(|-0\.0|\de[+-]\d\d")
 BESIDE = {
     "first_lost_text": "20",
     "second_lost_text": "10",
@@ -176,23 +182,17 @@ def test_a_sheet_names_what_was_typed(outcome, rows) -> None:
     assert rows.items() <= found.items()
 
 
-@settings(max_examples=60)
-@given(
-    st.sampled_from(("paired", "matched", "person-time", "strata")),
-    st.tuples(*[st.integers(0, 12)] * 4),
-    st.sampled_from(("score", "textbook", "exact")),
-)
-def test_every_form_can_be_exported(form: str, counts: tuple[int, ...], family) -> None:
-    """Zeros included: no exception, five columns, numbers in number cells, lines no longer than the terminal."""
-    outcome = {
-        "paired": lambda: paired(counts=counts),
-        "matched": lambda: paired("matched", counts),
-        "person-time": lambda: person_time((counts[0], counts[1] + 1, counts[2], counts[3] + 1)),
-        "strata": lambda: strata(rows=(("one", counts[0], 20, counts[1], 20), ("two", counts[2], 15, counts[3], 15))),
-    }[form]()
+@settings(max_examples=150)
+@given(outcomes(), st.sampled_from(FAMILIES))
+def test_whatever_is_typed_can_be_exported(outcome, family) -> None:
+    """Strict JSON, five columns, numbers in number cells, lines no longer than a terminal's, and no raw value."""
     choices = Choices(family=family)
-    assert letter(outcome, choices)
-    assert max(map(len, on_screen(outcome, choices).splitlines())) <= WIDTH
+    published = contract(outcome, choices, appraise(outcome, choices))
+    assert json.loads(json.dumps(published, allow_nan=False)) == published
+    text, shown = letter(outcome, choices), on_screen(outcome, choices)
+    assert not RAW.search(text)
+    assert not RAW.search(shown)
+    assert max(map(len, shown.splitlines())) <= WIDTH
     head, *rows = table_of(outcome, choices)
     assert head == SHEET_HEAD
     for row in rows:
