@@ -14,6 +14,7 @@ from fourcount.record.outcome import (
     Outcome,
     Pairs,
     PersonTime,
+    RiskAtTime,
     Strata,
     Stratum,
     form_of,
@@ -137,3 +138,18 @@ def test_what_no_file_can_hold_is_put_right():
     groups = (PastedGroup(left_text="3\ud800", right_text="4", label="a\udfff"),)
     after = editing.take_paste(Outcome(), Pasted(form="events-and-others", groups=groups))
     assert (after.table.first_left_text, after.first_label_text) == ("3\ufffd", "a\ufffd")
+
+
+@pytest.mark.parametrize("level", ["90%", ""])
+def test_printed_limits_take_the_level_that_stands_beside_them(level):
+    """The level of an earlier paste does not stay where none is printed now."""
+    before = Outcome(table=RiskAtTime(limits_level_text="99%"))
+    groups = (PastedGroup(left_text="9%", right_text="6 to 12%"), PastedGroup(left_text="17%", right_text="13 to 21%"))
+    taken = editing.take_paste(before, Pasted(form="risk-at-time", groups=groups, limits_level=level))
+    assert taken.table == RiskAtTime(
+        first_left_text="9%",
+        first_right_text="6 to 12%",
+        second_left_text="17%",
+        second_right_text="13 to 21%",
+        limits_level_text=level,
+    )

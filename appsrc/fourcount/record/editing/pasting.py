@@ -14,6 +14,7 @@ from fourcount.record.outcome import (
     EffectOnly,
     Outcome,
     PersonTime,
+    RiskAtTime,
     Strata,
     Stratum,
     Table,
@@ -58,7 +59,10 @@ def _table(before: Table, pasted: Pasted) -> Table:
     if isinstance(before, EffectOnly):
         return EffectOnly()
     table = replace(before, **{**dict.fromkeys(CELLS, ""), **_cells(pasted.groups)})
-    return replace(table, unit_text=storable(pasted.unit)) if isinstance(table, PersonTime) and pasted.unit else table
+    if isinstance(table, PersonTime) and pasted.unit:
+        return replace(table, unit_text=storable(pasted.unit))
+    # Limits are of the level that stands beside them; where none does, an earlier paste's must not stay.
+    return replace(table, limits_level_text=storable(pasted.limits_level)) if isinstance(table, RiskAtTime) else table
 
 
 def _cells(groups: tuple[PastedGroup, ...]) -> dict[str, str]:

@@ -14,7 +14,25 @@ OTHER_FORMS: dict[str, dict[Form, Form]] = {
 }
 """For a doubt, the forms that its counts may have instead."""
 
-TURNABLE: tuple[Form, ...] = ("events-and-others", "events-of-total")
+TURNABLE: tuple[Form, ...] = ("events-and-others", "events-of-total", "pairs")
+
+CHOSEN: tuple[Form, ...] = ("events-of-total", "pairs", "person-time")
+"""Forms that nobody is in without having chosen them: a bare block of four counts is then of that form."""
+FORM_DOUBTS = ("others-or-totals", "pairs-or-groups")
+
+
+def in_chosen_form(pasted: Pasted, form: Form) -> Pasted:
+    """Four bare counts as the form that the reader has chosen before, without the doubts that this settles."""
+    if form not in CHOSEN or not set(FORM_DOUBTS) & set(pasted.ambiguous) or len(pasted.groups) != 2:
+        return pasted
+    chosen = replace(
+        pasted, form=form, ambiguous=tuple(doubt for doubt in pasted.ambiguous if doubt not in FORM_DOUBTS)
+    )
+    if not _possible(chosen):
+        return pasted
+    settled = form == "events-of-total" and len(ways(chosen)) == 1
+    doubts = tuple(doubt for doubt in chosen.ambiguous if not (settled and doubt == "orientation"))
+    return replace(chosen, ambiguous=doubts)
 
 
 def ways(pasted: Pasted) -> tuple[Pasted, ...]:
