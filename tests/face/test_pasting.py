@@ -170,6 +170,28 @@ def test_the_other_way_round_is_what_is_taken(hands: Hands) -> None:
     assert isinstance(hands.window.session.outcome.table, EventsAndOthers | EventsOfTotal)
 
 
+def test_a_chosen_form_settles_what_four_counts_are(hands: Hands) -> None:
+    """In 38 of 412 the second number is a total, and no other way fits: it is taken at once."""
+    hands.do("form-events-of-total")
+    paste(hands, DOUBTFUL)
+    assert hands.texts == ("38", "412", "70", "409")
+    assert form_of(hands.window.session.outcome.table) == "events-of-total"
+    assert hands.window.printed.rare.panel is None
+
+
+def test_four_counts_in_the_form_of_pairs_are_pairs(hands: Hands) -> None:
+    """Which side runs down stays to be asked; the form and the design stay."""
+    hands.do("form-pairs")
+    paste(hands, "12\t21\n9\t58")
+    panel = panel_of(hands)
+    assert panel.understood.text() == "Pairs: 12 both, 21 first only, 9 second only, 58 neither"
+    hands.click(panel.turn)
+    assert panel.understood.text() == "Pairs: 12 both, 9 first only, 21 second only, 58 neither"
+    hands.click(panel.take)
+    assert hands.texts == ("12", "9", "21", "58")
+    assert hands.window.printed.design.currentData() == "paired"
+
+
 def test_typing_puts_an_offer_away(hands: Hands) -> None:
     """What was understood was for the table as it stood."""
     paste(hands, DOUBTFUL)

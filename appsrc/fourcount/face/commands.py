@@ -13,7 +13,7 @@ from fourcount.face import clipboard, dialogs
 from fourcount.face.session import Session
 from fourcount.ink.style import Style
 from fourcount.record import editing
-from fourcount.record.outcome import Design, Effect, Form, Layout
+from fourcount.record.outcome import Design, Effect, Form, Layout, form_of
 from fourcount.record.paper import Choices, Family, Record
 from fourcount.wording import labels, numbers
 
@@ -192,6 +192,9 @@ class Commands(QObject):
         self.noticed.emit(filled(before, self._session.outcome))
 
     def _offer_or_take(self, pasted: Pasted) -> None:
+        from fourcount.record.entry.turning import in_chosen_form
+
+        pasted = in_chosen_form(pasted, form_of(self._session.outcome.table))
         if pasted.ambiguous:
             self.paste_offered.emit(pasted)
         else:
