@@ -74,7 +74,7 @@ def test_words_agree_with_figures() -> None:
     """The headline and the patient's summary name the side on which the difference lies, of the outcome they name."""
     for question in questions(2, 400, 10_000):
         findings = findings_of(question)
-        difference = findings.measures["risk_difference"]
+        difference = _difference(findings)
         said = re.search(r"That is [\d,]+ (fewer|more)", headline(question.outcome, findings, question.choices))
         if isinstance(difference, Figure) and not isinstance(difference.estimate, Gap) and difference.estimate and said:
             assert (said[1] == "fewer") == (difference.estimate < 0), question
@@ -113,8 +113,14 @@ def _in_order(figure: Figure) -> bool:
     return interval.low - room <= estimate <= interval.high + room
 
 
+def _difference(findings: OutcomeFindings) -> object:
+    """The difference of the two risks, of groups or of pairs."""
+    measures = findings.measures
+    return measures["risk_difference"] if "risk_difference" in measures else measures["pair_difference"]
+
+
 def _kind(question: Question, findings: OutcomeFindings) -> str:
-    difference = findings.measures["risk_difference"]
+    difference = _difference(findings)
     assert isinstance(difference, Figure)
     assert not isinstance(difference.estimate, Gap)
     if difference.estimate == 0:
