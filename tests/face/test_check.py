@@ -84,6 +84,20 @@ def test_what_cannot_be_read_is_marked_with_its_reason(example: Hands) -> None:
     assert signs(example) == ["?"]
 
 
+def test_an_adjusted_effect_that_cannot_be_read_marks_its_own_field(example: Hands) -> None:
+    """The line of what the paper says stays unmarked."""
+    optional = example.window.printed.rare.optional
+    assert optional is not None
+    example.click(optional.links["adjusted"])
+    field = optional.rows["adjusted"].fields[0]
+    example.write(field, "a lot")
+    assert field.marked
+    assert any(note.startswith("a lot") for note in example.notes)
+    assert not check_of(example).paper.text.marked
+    example.write(example.window.printed.span, "2 years")
+    assert field.marked
+
+
 def test_adopting_takes_family_and_level_in_one_step(example: Hands) -> None:
     """A 90% textbook interval is found; the link takes both, and one undo gives both back."""
     view = check_of(example)

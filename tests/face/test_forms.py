@@ -103,6 +103,40 @@ def test_cells_say_what_they_are_in_every_form(hands: Hands, form: Form) -> None
     assert len(set(names)) == 4
 
 
+def test_stepping_through_the_forms_loses_nothing(example: Hands) -> None:
+    """With the arrow keys each form on the way is taken; the counts arrive where they can be kept, and come back."""
+    form = example.window.printed.form
+    example.choose(form, "38 in 4,120 person-years")
+    assert (example.texts[0], example.texts[2]) == ("38", "70")
+    example.choose(form, "strata")
+    example.choose(form, "38 · 374")
+    assert example.texts == ("38", "374", "70", "339")
+    assert example.window.printed.design.currentData() == "trial"
+
+
+def test_stepping_through_the_designs_loses_nothing(example: Hands) -> None:
+    """Paired designs on the way are passed through."""
+    example.choose(example.window.printed.design, "before-after study")
+    example.choose(example.window.printed.design, "randomised trial")
+    assert example.texts == ("38", "374", "70", "339")
+    assert example.window.printed.form.currentData() == "events-and-others"
+
+
+def test_the_paper_is_asked_for_the_measure_that_fits(example: Hands) -> None:
+    """Rates bring the rate ratio, cases and controls the odds ratio, until somebody types or chooses."""
+    check = example.window.printed.rare.check
+    assert check is not None
+    assert check.paper.measure.currentText() == "risk ratio"
+    example.do("form-person-time")
+    assert check.paper.measure.currentText() == "rate ratio"
+    example.do("undo")
+    example.choose(example.window.printed.design, "case-control study")
+    assert check.paper.measure.currentText() == "odds ratio"
+    example.choose(check.paper.measure, "hazard ratio")
+    example.choose(example.window.printed.design, "randomised trial")
+    assert check.paper.measure.currentText() == "hazard ratio"
+
+
 def test_percentages_show_the_people_they_stand_for(hands: Hands) -> None:
     """Under 9.2% of 412 stand 38 people; the others and the sums are worked out."""
     hands.do("form-percent-of-total")

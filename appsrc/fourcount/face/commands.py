@@ -13,7 +13,7 @@ from fourcount.face import clipboard, dialogs
 from fourcount.face.session import Session
 from fourcount.ink.style import Style
 from fourcount.record import editing
-from fourcount.record.outcome import Design, Effect, Form, Layout, form_of
+from fourcount.record.outcome import Design, Effect, Form, Layout, Outcome, PaperMeasure, form_of
 from fourcount.record.paper import Choices, Family, Record
 from fourcount.wording import labels, numbers
 
@@ -33,6 +33,9 @@ CHOOSING: dict[str, Callable[..., Any]] = {
 }
 """What takes the choices of rows that are not always there."""
 
+
+USUAL_MEASURES = ("risk_ratio", "odds_ratio", "rate_ratio")
+"""What papers mostly print; another choice was somebody's own."""
 
 EFFECT_FIELDS = ("paper_text", "adjusted_text", "adjusted_for_text")
 """Fields in which a printed effect is what belongs there, not a table to fill."""
@@ -59,6 +62,8 @@ class Commands(QObject):
         self._style = style
         self._window = window
         self.picture: PictureView | None = None
+        self._origin = session.outcome
+        self._stepped: tuple[str, Outcome] | None = None
 
     def new_table(self) -> None:
         """Begin with an empty record that keeps the choice of intervals; undo brings the last one back."""
@@ -94,7 +99,7 @@ class Commands(QObject):
 
     def choose_design(self, key: Design) -> None:
         """Take a study design."""
-        self._session.change_outcome(editing.with_design(self._session.outcome, key))
+        self._step("design", lambda origin: editing.with_design(origin, key))
 
     def choose_welcome(self, key: str) -> None:
         """Say whether the counted outcome is a good one."""
@@ -102,10 +107,15 @@ class Commands(QObject):
 
     def choose_form(self, key: Form) -> None:
         """Take a form of print by its key. Empty strata begin as 38 of 412, as most papers print them."""
-        before = self._session.outcome
-        outcome = editing.in_form(before, key)
-        if key == "strata" and not editing.typed_texts(before):
-            outcome = editing.with_of_total(outcome, True)
+        self._step("form", lambda origin: _in_form(origin, key))
+
+    def _step(self, kind: str, change: Callable[[Outcome], Outcome]) -> None:
+        """Choose anew from where a run of such choices began: a form that is only passed through loses nothing."""
+        now = self._session.outcome
+        if self._stepped != (kind, now):
+            self._origin = now
+        outcome = _fitting_measure(change(self._origin))
+        self._stepped = (kind, outcome)
         self._session.change_outcome(outcome)
 
     def choose(self, field: str, choice: object) -> None:
@@ -223,3 +233,20 @@ class Commands(QObject):
                 self._session.change_record(editing.with_level(self._session.record, reading.value))
                 break
             now, problem = text, mark_text(reading) if isinstance(reading, Unreadable) else ""
+
+
+def _in_form(outcome: Outcome, key: Form) -> Outcome:
+    formed = editing.in_form(outcome, key)
+    if key == "strata" and not editing.typed_texts(outcome):
+        return editing.with_of_total(formed, True)
+    return formed
+
+
+def _fitting_measure(outcome: Outcome) -> Outcome:
+    """While the paper says nothing yet, the measure that papers print of such a table."""
+    if outcome.paper_text.strip() or outcome.paper_measure not in USUAL_MEASURES:
+        return outcome
+    odds = outcome.design in ("case-control", "matched")
+    rates = form_of(outcome.table) == "person-time"
+    measure: PaperMeasure = "rate_ratio" if rates else "odds_ratio" if odds else "risk_ratio"
+    return editing.with_paper_measure(outcome, measure)

@@ -86,15 +86,15 @@ class CheckView(FieldsView):
 
     def _show_findings(self, check: CheckFindings | None) -> None:
         told: list[tuple[bool, str]] = []
-        marks: list[str] = []
+        marks: dict[str, str] = {}
         if check is not None:
             from fourcount.wording.check import check_lines
             from fourcount.wording.gaps import mark_text
 
             told = [(line.agrees, line.text) for line in check_lines(check)]
-            marks = [mark_text(mark) for mark in check.marks]
-        self.paper.text.show_mark(" ".join(marks))
-        told += [(False, text) for text in marks]
+            marks = {mark.field: mark_text(mark) for mark in check.marks}
+        self.paper.text.show_mark(marks.get(self.paper.text.field, ""))
+        told += [(False, text) for text in marks.values()]
         for place in range(max(len(told), len(self.rows))):
             self._show_row(place, *told[place] if place < len(told) else (False, ""))
 
