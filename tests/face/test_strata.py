@@ -164,6 +164,15 @@ def test_one_table_becomes_the_first_row_and_comes_back(example: Hands) -> None:
     assert example.texts == ("38", "374", "70", "339")
 
 
+def test_rows_are_only_offered_where_there_are_strata(strata: Hands) -> None:
+    """In any other form the commands of rows are off."""
+    actions = strata.window.actions_by_key
+    assert actions["add-row"].isEnabled()
+    strata.do("form-events-of-total")
+    assert not actions["add-row"].isEnabled()
+    assert not actions["remove-row"].isEnabled()
+
+
 def test_fifty_rows_are_the_most(hands: Hands) -> None:
     """A row more than fifty is not made."""
     hands.do("form-strata")

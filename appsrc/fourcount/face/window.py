@@ -22,7 +22,7 @@ from fourcount.face.look import APPEARANCES, Look
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import Outcome, Strata
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
 from fourcount.wording.standing import STANDING
@@ -193,6 +193,8 @@ class MainWindow(QMainWindow):
         self.cautions.show_state(findings)
         self.actions_by_key["undo"].setEnabled(self.session.can_undo)
         self.actions_by_key["redo"].setEnabled(self.session.can_redo)
+        for key in ("add-row", "remove-row"):
+            self.actions_by_key[key].setEnabled(isinstance(outcome.table, Strata))
         title = record.title_text.strip()
         self.setWindowTitle(labels.TITLED_WINDOW.format(title=title) if title else labels.WINDOW_TITLE)
         self._ask_for_the_rest()
