@@ -16,8 +16,9 @@ from fourcount.face import dialogs
 from fourcount.face.application import make_application, make_window
 from fourcount.face.measure_row import MeasureRow
 from fourcount.face.window import MainWindow
-from fourcount.record.outcome import CELLS
+from fourcount.record.outcome import CELLS, Form
 from fourcount.record.paper import Record
+from printed_forms import TYPED
 
 EXAMPLE_COUNTS = ("38", "374", "70", "339")
 
@@ -77,6 +78,18 @@ class Hands:
                 self.type(text)
             else:
                 self.press("Del")
+
+    def fill(self, form: Form) -> None:
+        """Take a form and type something whole into it."""
+        self.do(f"form-{form}")
+        if form == "effect-only":
+            self.type("OR 0.49 (0.32 to 0.75)")
+        elif form == "strata":
+            for text in ("38", "412", "70", "409", "old", "10", "100", "20", "100"):
+                self.type(text)
+                self.press("Return")
+        else:
+            self.count(*TYPED[form])
 
     def choose(self, box: QComboBox, text: str) -> None:
         """Go to a choice and step to an entry, as a closed box takes it: each step on the way is chosen too."""
