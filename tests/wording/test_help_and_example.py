@@ -77,6 +77,7 @@ def test_every_letter_of_a_formula_is_explained():
 def test_every_form_of_entry_is_explained_by_its_specimen(specimen):
     """In the words of the choice itself, in whole sentences."""
     assert dict(entering())[specimen].endswith(".")
+    assert terms()[: len(entering())] == entering()
 
 
 @pytest.mark.parametrize("name", ["paste", "what the paper prints"])

@@ -103,8 +103,8 @@ def methods_and_sources() -> tuple[Section, ...]:
 
 
 def terms() -> tuple[tuple[str, str], ...]:
-    """The terms on screen in the order in which a reader meets them, each with its explanation."""
-    return TERMS
+    """What is entered by its specimen, then the terms in the order in which a reader meets them, each explained."""
+    return (*ENTERING, *TERMS)
 
 
 def entering() -> tuple[tuple[str, str], ...]:
