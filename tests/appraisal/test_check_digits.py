@@ -85,3 +85,11 @@ def test_bounds_hold_what_rounds_so(units: int, decimals: int) -> None:
     least, most = bounds(printed)
     assert least < printed.value < most
     assert rounds_to(printed.value, printed)
+
+
+@pytest.mark.parametrize(("text", "fits"), [("0.38", True), ("0.37", False), ("0.36", False)])
+def test_a_float_on_a_tie_rounds_up_or_to_the_even_digit(text: str, fits: bool) -> None:
+    """3/8 to two decimals is 0.38 both ways; 0.37 leaves a digit off. An even digit below the tie is taken: 0.12."""
+    assert rounds_to(0.375, number(text)) is fits
+    assert rounds_to(0.125, number("0.12"))
+    assert rounds_to(0.125, number("0.13"))

@@ -120,3 +120,19 @@ def test_a_p_with_nothing_beside_it() -> None:
     """Neither counts nor limits: nothing is asked."""
     (finding,) = said(printed("risk_ratio", "0.54", p="0.03"))
     assert (finding.key, finding.agrees) == ("p-unchecked", True)
+
+
+def test_a_p_of_nothing_stands_for_less_than_half_its_last_digit() -> None:
+    """No p is 0: "0.000" can only mean less than 0.0005, and a bare "0" says nothing that a test could give."""
+    strong, weak = of_counts(counts_of((10, 90, 60, 40))), of_counts(counts_of(SMALL))
+    note, source = said(printed("risk_ratio", "0.17", p="0.000"), strong)
+    assert (note.key, source.key) == ("p-zero", "p-reproduced")
+    note, source = said(printed("risk_ratio", "3.00", p="0"), weak)
+    assert (note.key, source.key) == ("p-zero", "p-differs")
+
+
+def test_tests_that_part_are_told_with_the_span_of_their_p() -> None:
+    """Where several tests give the printed digits with different p, the least and the greatest are told."""
+    (finding,) = said(printed("risk_ratio", "3.00", p="0.03"), of_counts(counts_of(SMALL)))
+    assert len(str(finding.facts["tests"]).split()) > 1
+    assert finding.facts["p"] < finding.facts["p_most"]

@@ -36,7 +36,7 @@ PRINTS = [
     printed("risk_ratio", "0.49", "0.21", "1.95", p="0.03"),
     printed("risk_ratio", "1.10", "0.7", "9.9"),
     printed("risk_ratio", "0.45", "0.372", "0.781"),
-    printed("risk_ratio", "0.53", "0.37", "0.78"),
+    printed("risk_ratio", "0.53", "0.37", "0.78", p="0.000"),
     printed("risk_ratio", "0.55", "0.38", "0.78"),
     printed("risk_ratio", "0.70", "0.41", "0.99"),
     printed("risk_ratio", "0.70", "0.80", "0.99"),

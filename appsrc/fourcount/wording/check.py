@@ -65,6 +65,9 @@ TEXTS = {
 }
 """One sentence for every finding but those about p."""
 
+NOTES = ("adjusted", "no-hazard-ratio", "p-unchecked", "p-zero")
+"""Findings that neither confirm the print nor ask to check it."""
+
 NO_METHOD_GIVEN = "no method here gives limits"
 NEAREST = "{methods} at {level} gives {limits}"
 OWN = ", while the {name} is {value}"
@@ -84,11 +87,15 @@ UNKNOWN = "Check {printed}."
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class CheckLine:
-    """One sentence of a check; ``agrees`` where it asks for nothing to be looked at."""
+    """One sentence of a check; ``agrees`` where it asks for nothing to be looked at.
+
+    A ``note`` neither confirms anything nor asks for anything.
+    """
 
     key: str
     text: str
     agrees: bool
+    note: bool = False
 
 
 def check_lines(found: CheckFindings) -> tuple[CheckLine, ...]:
@@ -134,7 +141,7 @@ def adopt_text(adopt: tuple[str, float]) -> str:
 
 
 def _line(finding: Finding, text: str) -> CheckLine:
-    return CheckLine(key=finding.key, text=text, agrees=finding.agrees)
+    return CheckLine(key=finding.key, text=text, agrees=finding.agrees, note=finding.key in NOTES)
 
 
 def _whole(value: Fact | None) -> str:

@@ -13,6 +13,7 @@ P_TEXTS = {
     "p-beside-interval": "Check p: {printed} stands beside {level} limits that {hold} no effect ({no_effect}); they "
     "may rest on different methods.",
     "p-differs": "Check p: {printed}, while {others}. Another test or an adjustment may explain it.",
+    "p-zero": "No p is 0: {printed} can only mean less than {half}.",
     "p-unchecked": "There is nothing here to hold {printed} against.",
 }
 EVERY_TEST = "every test here"
@@ -20,6 +21,7 @@ HOLD = {1: "include", 0: "leave out"}
 NEAREST_TEST = "the nearest test of the counts, {test}, gives {p}"
 FROM_LIMITS = "the printed limits give about {p}"
 BOTH = " and "
+SPAN = "{least} to {most}"
 
 
 def p_text(finding: Finding, figure: PrintedFigure) -> str:
@@ -30,7 +32,8 @@ def p_text(finding: Finding, figure: PrintedFigure) -> str:
     parts = {
         "printed": printed_p(figure),
         "tests": names.test_list(tests) if tests else EVERY_TEST,
-        "ours": _p_beside(p, figure),
+        "ours": _span(_p_beside(p, figure), _p_beside(facts.get("p_most", p), figure)),
+        "half": numbers.plain(half) if isinstance(half := facts.get("half"), float) else "…",
         "implied": _p_beside(implied, figure),
         "level": numbers.level(level) if isinstance(level, float) else "the",
         "hold": HOLD.get(int(facts.get("inside", 0)), ""),
@@ -52,6 +55,10 @@ def _p_beside(value: object, figure: PrintedFigure) -> str:
         return "…"
     decimals = 2 if figure.p is None else figure.p.decimals
     return numbers.plain(value, decimals + 1) if value > 0 else "0"
+
+
+def _span(least: str, most: str) -> str:
+    return least if least == most else SPAN.format(least=least, most=most)
 
 
 def _p_alone(value: object) -> str:

@@ -37,7 +37,7 @@ SIDE_HINTS = {
 STRATUM_CELL = "row {number}, {name}"
 
 CHECK_HEAD = "Does it add up?"
-CHECK_MARKS = {True: "agrees", False: "to check"}
+CHECK_MARKS = {"=": "agrees", "?": "to check", "·": "note"}
 
 OPTIONAL = {
     "counting": "People or events",

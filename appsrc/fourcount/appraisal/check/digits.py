@@ -43,7 +43,10 @@ def rounds_to(value: Number, printed: PrintedNumber) -> bool:
     units = abs(last_digits(printed))
     if isinstance(size, Fraction):
         return units in {math.floor(size + _HALF), round(size)}
-    return bool(abs(size - units) <= 0.5 + _TIE * max(1.0, size))
+    below = math.floor(size)
+    if abs(size - below - 0.5) <= _TIE * max(1.0, size):
+        return units in {below + 1, below + below % 2}
+    return units == math.floor(size + 0.5)
 
 
 def cut_to(value: Number, printed: PrintedNumber) -> bool:

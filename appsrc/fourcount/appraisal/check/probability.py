@@ -13,6 +13,7 @@ from fourcount.stats.normal import quantile, two_sided_p
 from fourcount.stats.results import Fact
 
 NO_EFFECT_AT_ZERO: frozenset[PrintedMeasure] = frozenset({"risk_difference", "rate_difference", "relative_reduction"})
+_DECIMALS_OF_ZERO = 2
 _OTHER_TEST = 1.5
 """How many times larger or smaller a p may be than the limits say, since it may come from another test."""
 
@@ -39,11 +40,14 @@ def p_findings(figure: PrintedFigure, tests: tuple[Tested, ...], level: float) -
     if figure.p is None:
         return ()
     beside = _beside_interval(figure, level)
-    return (*beside, _source(figure, figure.p, tests, level, contradicted=bool(beside)))
+    zero = (Finding(key="p-zero", facts={"half": bounds(figure.p)[1]}, agrees=True),) if figure.p.value == 0 else ()
+    return (*zero, *beside, _source(figure, figure.p, tests, level, contradicted=bool(beside)))
 
 
 def agrees(p: float, printed: PrintedNumber, figure: PrintedFigure) -> bool:
-    """Whether a p prints so."""
+    """Whether a p prints so. No p is 0: one printed so with two decimals or more is less than half its last digit."""
+    if printed.value == 0:
+        return figure.p_relation == "=" and printed.decimals >= _DECIMALS_OF_ZERO and p < bounds(printed)[1]
     if figure.p_relation == "<":
         return p < printed.value
     return p > printed.value if figure.p_relation == ">" else rounds_to(p, printed)
@@ -117,7 +121,8 @@ def _source(
     fitting = () if figure.adjusted else tuple(test for test in tests if agrees(test.p, p, figure))
     if fitting:
         every = len(fitting) == len(tests) > 1
-        facts: dict[str, Fact] = {"tests": "" if every else " ".join(test.key for test in fitting), "p": fitting[0].p}
+        facts: dict[str, Fact] = {"tests": "" if every else " ".join(test.key for test in fitting)}
+        facts |= {"p": min(test.p for test in fitting), "p_most": max(test.p for test in fitting)}
         return Finding(key="p-reproduced", facts=facts, agrees=True)
     facts = {}
     triple = triple_of(figure)

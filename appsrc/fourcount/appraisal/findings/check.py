@@ -49,7 +49,8 @@ class FigureCheck(msgspec.Struct, frozen=True, kw_only=True):
 class CheckFindings(msgspec.Struct, frozen=True, kw_only=True):
     """The check of all that the paper prints, and the marks of what could not be read.
 
-    ``cells`` are findings about percentages that stand beside the counts themselves. ``adopt`` is the family and level under which this record's figures are the paper's, where one is told.
+    ``cells`` are findings about percentages that stand beside the counts themselves. ``adopt`` is the family and level
+    under which this record's figures are the paper's, where one is told.
     """
 
     figures: tuple[FigureCheck, ...] = ()

@@ -21,8 +21,10 @@ from fourcount.wording.printed_labels import CHECK_HEAD, CHECK_MARKS
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import CheckFindings
+    from fourcount.wording.check import CheckLine
 
-SIGNS = {True: "=", False: "?"}
+AGREES, TO_CHECK, NOTE = CHECK_MARKS
+PARTS = {AGREES: "accent", TO_CHECK: "caution", NOTE: "muted"}
 
 
 class Row(NamedTuple):
@@ -85,20 +87,20 @@ class CheckView(FieldsView):
         return [row.words.text() for row in self.rows if not row.words.isHidden()]
 
     def _show_findings(self, check: CheckFindings | None) -> None:
-        told: list[tuple[bool, str]] = []
+        told: list[tuple[str, str]] = []
         marks: dict[str, str] = {}
         if check is not None:
             from fourcount.wording.check import check_lines
             from fourcount.wording.gaps import mark_text
 
-            told = [(line.agrees, line.text) for line in check_lines(check)]
+            told = [(_sign(line), line.text) for line in check_lines(check)]
             marks = {mark.field: mark_text(mark) for mark in check.marks}
         self.paper.text.show_mark(marks.get(self.paper.text.field, ""))
-        told += [(False, text) for text in marks.values()]
+        told += [(TO_CHECK, text) for text in marks.values()]
         for place in range(max(len(told), len(self.rows))):
-            self._show_row(place, *told[place] if place < len(told) else (False, ""))
+            self._show_row(place, *told[place] if place < len(told) else (TO_CHECK, ""))
 
-    def _show_row(self, place: int, agrees: bool, text: str) -> None:
+    def _show_row(self, place: int, sign: str, text: str) -> None:
         if place == len(self.rows):
             row = Row(QLabel(), Words(self._look, "body", selectable=True))
             row.sign.setTextFormat(Qt.TextFormat.PlainText)
@@ -108,11 +110,11 @@ class CheckView(FieldsView):
             self.rows.append(row)
         row = self.rows[place]
         row.sign.setVisible(bool(text))
-        row.sign.setText(SIGNS[agrees] if text else "")
-        row.sign.setAccessibleName(CHECK_MARKS[agrees])
-        row.words.setAccessibleName(f"{CHECK_MARKS[agrees]}: {text}" if text else "")
+        row.sign.setText(sign if text else "")
+        row.sign.setAccessibleName(CHECK_MARKS[sign])
+        row.words.setAccessibleName(f"{CHECK_MARKS[sign]}: {text}" if text else "")
         row.words.show_words(text)
-        self._dress(row, agrees)
+        self._dress(row, sign)
 
     def _show_adopt(self, check: CheckFindings | None, choices: Choices) -> None:
         adopt = check.adopt if check else None
@@ -123,9 +125,9 @@ class CheckView(FieldsView):
 
             self.adopt.show_words(adopt_text(adopt))
 
-    def _dress(self, row: Row, agrees: bool) -> None:
+    def _dress(self, row: Row, sign: str) -> None:
         row.sign.setFont(self._look.font("strong"))
-        row.sign.setPalette(self._look.text_palette("accent" if agrees else "caution"))
+        row.sign.setPalette(self._look.text_palette(PARTS[sign]))
         row.sign.setMinimumWidth(self._look.px(16))
 
     def _on_look_changed(self) -> None:
@@ -134,4 +136,8 @@ class CheckView(FieldsView):
         self._findings.setHorizontalSpacing(0)
         self._findings.setVerticalSpacing(px(6))
         for row in self.rows:
-            self._dress(row, row.sign.text() == SIGNS[True])
+            self._dress(row, row.sign.text() or TO_CHECK)
+
+
+def _sign(line: CheckLine) -> str:
+    return NOTE if line.note else AGREES if line.agrees else TO_CHECK
