@@ -75,6 +75,8 @@ def take(shot: Shot, folder: Path, application: QApplication) -> None:
         window.resize(shot.width, shot.height)
         window.show()
         wait_for(window.numbers_ready.connect)
+        if shot.example and not window.checking.found:
+            wait_for(window.checking.changed.connect)
         for _ in range(3):
             application.processEvents()
         window.grab().save(str(folder / f"{shot.name}.png"))

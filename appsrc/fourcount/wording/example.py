@@ -28,6 +28,7 @@ def worked_example() -> Record:
                 left_words_text="fell at least once",
                 right_words_text="did not fall",
                 span_text="12 months",
+                paper_text="0.54 (0.37 to 0.78)",
             ),
         ),
     )
