@@ -12,7 +12,8 @@ from fourcount.record.entry.pasted.groups import Understood, agrees, two_groups
 from fourcount.record.entry.pasted.headings import is_sum
 from fourcount.record.entry.pasted.matrix import Matrix, matrix_of
 from fourcount.record.entry.pasted.pair_table import pair_table
-from fourcount.record.entry.pasted.quantities import Quantity, beside
+from fourcount.record.entry.pasted.proportions import beside
+from fourcount.record.entry.pasted.quantities import Quantity
 from fourcount.record.entry.pasted.strata_rows import Strata, strata_of
 from fourcount.record.entry.printed import read_paper
 from fourcount.record.entry.readings import Pasted, PastedGroup

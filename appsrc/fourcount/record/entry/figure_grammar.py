@@ -2,7 +2,9 @@
 
 from __future__ import annotations
 
+import re
 from collections.abc import Sequence
+from math import isinf
 
 import msgspec
 
@@ -41,6 +43,8 @@ _TIME_WORDS = frozenset(
 _USUAL_LEVELS = (80, 90, 95, 97.5, 98, 99, 99.9)
 _RISKS = ("risk", "incidence", "mortality", "prevalence", "proportion")
 _LONGEST_WAY = 14
+_ENDLESS = ("inf", "infinity", "infinite", "nan")
+_EXPONENT = re.compile("e[0-9]+|e-[0-9]+")
 
 
 class Figure:
@@ -125,10 +129,30 @@ class Grammar:
                 else:
                     found.append(figure)
             else:
-                if self.tokens[place].kind == "number" and self._at(place + 1).lower not in _TIME_WORDS:
-                    self.leftover.append(self.tokens[place])
-                place += 1
+                endless = self._endless(place)
+                name = None if endless else name
+                place = endless or self._skipped(place)
         return found
+
+    def _skipped(self, place: int) -> int:
+        """The place after a token that is taken for nothing; a number other than a length of time is noted."""
+        if self.tokens[place].kind == "number" and self._at(place + 1).lower not in _TIME_WORDS:
+            self.leftover.append(self.tokens[place])
+        return place + 1
+
+    def _endless(self, place: int) -> int | None:
+        """The place after an estimate that is no finite number, its bracket included: "inf (0 to inf)", "1e999"."""
+        token, following = self.tokens[place], self._at(place + 1)
+        after = place + 1
+        if token.kind == "number" and following.start == token.end and _EXPONENT.fullmatch(following.lower):
+            after += 1
+        elif token.lower not in _ENDLESS and not isinf(token.value):
+            return None
+        self.leftover.append(token)
+        if self._at(after).text not in _OPENING:
+            return after
+        close = (step for step in range(after, min(after + _LONGEST_WAY, len(self.tokens))))
+        return next((step + 1 for step in close if self.tokens[step].text in _CLOSING), after)
 
     def _name(self, place: int) -> Name | None:
         name = name_at(self.tokens, place)
@@ -147,7 +171,8 @@ class Grammar:
     def _begins_figure(self, place: int, named: bool) -> bool:
         """Whether an estimate stands here: a number, not of a length of time, nor a count of a total."""
         token, following = self.tokens[place], self._at(place + 1)
-        if token.kind != "number" or not (named or self.unnamed):
+        exponent = following.start == token.end and _EXPONENT.fullmatch(following.lower)
+        if token.kind != "number" or not (named or self.unnamed) or isinf(token.value) or exponent:
             return False
         if following.lower in _TIME_WORDS or following.text == "/" or following.lower in ("of", "patients"):
             return False

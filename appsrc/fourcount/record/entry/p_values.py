@@ -39,7 +39,8 @@ def p_at(tokens: Sequence[Token], place: int) -> FoundP | None:
         token = tokens[step]
         if token.kind == "number":
             number, after = _number(tokens, step)
-            told = number.decimals > 0 or relation != "=" or number.value in (0, 1)
+            equal = any(each.text == "=" for each in tokens[place + 1 : step])
+            told = number.decimals > 0 or relation != "=" or equal or number.value in (0, 1)
             return FoundP(relation, number, after, own) if told else None
         if token.lower in _NOT_OF_AN_EFFECT:
             own = False

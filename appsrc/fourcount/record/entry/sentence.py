@@ -11,8 +11,10 @@ import msgspec
 from fourcount.record.entry.pasted.doubts import PASTE_DOUBTS
 from fourcount.record.entry.pasted.event_words import event_words, time_span
 from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
-from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity, beside, gives
-from fourcount.record.entry.pasted.totals import shared_total, with_totals
+from fourcount.record.entry.pasted.pair_words import pair_sentence
+from fourcount.record.entry.pasted.proportions import beside, gives
+from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity
+from fourcount.record.entry.pasted.totals import leads_clause, shared_total, with_totals, without_sums
 from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, INTRODUCERS, LINKING, NOT_PEOPLE, PEOPLE
 from fourcount.record.entry.printed import named_figures
 from fourcount.record.entry.readings import Pasted, PastedGroup
@@ -41,7 +43,7 @@ def read_sentence(text: str) -> Pasted | None:
     numbers = sum(token.kind == "number" for token in printed.tokens)
     if len(printed.tokens) > _MOST_TOKENS or not 1 < numbers <= _MOST_NUMBERS:
         return None
-    return SentenceReader(printed).read()
+    return pair_sentence(printed) or SentenceReader(printed).read()
 
 
 class SentenceReader:
@@ -59,9 +61,12 @@ class SentenceReader:
     def read(self) -> Pasted | None:
         """The first two quantities that make a table, else results alone, else None."""
         for bare in (False, True):
-            quantities = self._quantities(bare=bare)
+            found = self._quantities(bare=bare)
+            quantities = without_sums(found)
             for first, second in self._pairs(quantities, bare=bare):
                 pasted = self._table(first, second, quantities, bare=bare)
+                if pasted and len(quantities) < len(found):
+                    return msgspec.structs.replace(pasted, ambiguous=(*pasted.ambiguous, "total-left-out"))
                 if pasted:
                     return pasted
         return self._effect_only()
@@ -72,12 +77,17 @@ class SentenceReader:
         place = 0
         while place < len(self.tokens):
             quantity = phrases.quantity_at(place) if self.tokens[place].kind == "number" else None
-            if quantity and bare and quantity.events and self.tokens[place - 1].text == "=":
+            if quantity and bare and quantity.events and self._is_total_already(place, quantity):
                 quantity = None
             place = quantity.after if quantity else place + 1
             if quantity and not self._of_something_else(quantity) and not self._joined(found, quantity):
                 found.append(self._with_count_before(quantity, found[-1].after if found else 0))
         return found
+
+    def _is_total_already(self, place: int, quantity: Quantity) -> bool:
+        """Whether a bare number is printed as a total: "n = 412", or "Of 412 patients with lamps, ..."."""
+        bare = quantity.percent is None and not quantity.complete
+        return self.tokens[place - 1].text == "=" or (bare and leads_clause(self.tokens, place))
 
     def _joined(self, found: list[Quantity], quantity: Quantity) -> bool:
         """Put a percentage that stands alone to the count that it is of, "38 of 412 on foam mattresses (9.2%)"."""
@@ -175,6 +185,8 @@ class SentenceReader:
             if (first.total and first.total.whole) == (second.total and second.total.whole):
                 return None
             doubts.append("not-compared")
+        nested = first.events is not None and second.total is not None and first.events.whole == second.total.whole
+        doubts += ["not-compared"] if nested and "not-compared" not in doubts else []
         return self._pasted((first, second), labels, (start, end), doubts, quantities)
 
     def _counts_without_totals(
@@ -201,6 +213,8 @@ class SentenceReader:
         between = {token.lower for token in self.tokens[first.after : second.first]}
         around = {token.lower for token in self.tokens[bounds[0] : bounds[1]]}
         effect = any(figure.measure in _EFFECTS for figure in self.figures)
+        if _of_own_totals(first) and _of_own_totals(second):
+            return all(labels)
         if COMPARATORS & between or _GROUP_WORDS & around or effect or (self.figures and all(labels)):
             return True
         if strictly or not all(labels):
@@ -227,7 +241,7 @@ class SentenceReader:
         others = [
             each
             for each in quantities
-            if each.events and each.complete and each.first not in (pair[0].first, pair[1].first)
+            if each.events and (each.complete or each.percent) and each.first not in (pair[0].first, pair[1].first)
         ]
         if others and not (pair[0].time and not others[0].time):
             doubts.append("more-counts")
@@ -270,6 +284,12 @@ def _form(pair: Sequence[Quantity]) -> Form:
     if pair[0].events is not None:
         return "events-of-total"
     return "risk-at-time" if pair[0].low is not None else "percent-of-total"
+
+
+def _of_own_totals(quantity: Quantity) -> bool:
+    """Whether a count follows its own total, "Of 412 patients with lamps, 38 ..."."""
+    events, total = quantity.events, quantity.total
+    return events is not None and total is not None and total.end < events.start and quantity.percent is None
 
 
 def _agrees(quantity: Quantity) -> bool:

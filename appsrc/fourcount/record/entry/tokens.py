@@ -14,6 +14,7 @@ import msgspec
 
 from fourcount.record.entry.digits import alike_in_ascii
 from fourcount.record.entry.number_words import UNITS, spelled_number
+from fourcount.record.entry.word_list import words
 
 Kind = Literal["number", "word", "mark", "break"]
 
@@ -26,6 +27,14 @@ _RAISED = dict.fromkeys(map(ord, "\u2219\u2022\u2027\u22c5\u30fb"), "\u00b7")
 _UNSEEN = re.compile("[\u00ad\u061c\u200b-\u200f\u202a-\u202e\u2060-\u206f\ufeff]+")
 _CONTROLS = re.compile("[\x00-\x08\x0e-\x1f\x7f-\x84\x86-\x9f\ud800-\udfff]")
 _BREAKS = re.compile("\r\n|[\r\v\f\x85\u2028\u2029]")
+_COUNTED = frozenset(
+    words(
+        "death deaths event events infection infections fall falls case cases stroke strokes relapse relapses "
+        "recurrence recurrences fracture fractures complication complications bleed bleeds bleeding patient patients "
+        "participant participants child children woman women man men person one infant infants adult adults resident "
+        "residents failure failures reaction reactions"
+    )
+)
 _NO_BREAK = "\ue000"
 
 _TOKEN = re.compile(
@@ -163,6 +172,16 @@ def _number(match: re.Match[str], text: str, found: list[Token]) -> tuple[Token,
     return Token("number", printed, start, end, "", -value if negative else value, whole, decimals, bool(percent)), end
 
 
+def _none_of(tokens: list[Token], place: int) -> bool:
+    """Whether "no" counts people or events: "No deaths occurred among 120 patients", not "no difference in 412"."""
+    behind = tokens[place + 1 : place + 8]
+    if not behind or behind[0].lower not in _COUNTED:
+        return False
+    link = next((step for step, token in enumerate(behind) if token.lower in ("among", "in", "of")), len(behind))
+    follows = [token for token in behind[link + 1 :] if token.lower != "the"][:1]
+    return all(token.kind == "word" for token in behind[:link]) and bool(follows) and follows[0].kind == "number"
+
+
 def _with_spelled(tokens: list[Token]) -> list[Token]:
     """The tokens with numbers in words ("thirty-two") as numbers."""
     found: list[Token] = []
@@ -170,6 +189,10 @@ def _with_spelled(tokens: list[Token]) -> list[Token]:
     while place < len(tokens):
         token = tokens[place]
         if token.lower in ("none", "zero") and [each.lower for each in tokens[place + 1 : place + 2]] == ["of"]:
+            found.append(Token("number", "0", token.start, token.end, token.lower, 0.0, 0))
+            place += 1
+            continue
+        if token.text in ("No", "no") and _none_of(tokens, place):
             found.append(Token("number", "0", token.start, token.end, token.lower, 0.0, 0))
             place += 1
             continue

@@ -9,7 +9,8 @@ import msgspec
 from fourcount.record.entry.pasted.cells import Cell
 from fourcount.record.entry.pasted.headings import Role, role_of
 from fourcount.record.entry.pasted.matrix import Head, Matrix
-from fourcount.record.entry.pasted.quantities import Quantity, gives, nearly_gives
+from fourcount.record.entry.pasted.proportions import gives, nearly_gives
+from fourcount.record.entry.pasted.quantities import Quantity
 from fourcount.record.entry.pasted.result_text import named_result
 from fourcount.record.entry.tokens import Token
 

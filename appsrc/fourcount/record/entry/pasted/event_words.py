@@ -21,6 +21,7 @@ _MOST_WORDS = 10
 _SAY_IT = frozenset(("healed", "resolved", "recurred", "failed", "persisted", "returned"))
 _CHANGED = frozenset(("fell", "dropped", "improved"))
 _TRAILING = frozenset(("in", "the", "at", "by", "within", "with", "after", "out", "of", "for", "a", "to"))
+_AFTER_NOUNS = INTRODUCERS | HAPPENED | BE | {"of", "per", "out", "over", "during", "occurred"}
 _NO_EVENT = frozenset(("was", "were", "is", "are", "been", "had", "has", "have", "received", "of", "did"))
 
 
@@ -105,14 +106,11 @@ def _counted_noun(printed: Print, quantity: Quantity) -> str:
     tokens = printed.tokens
     place = quantity.first + 1
     start = place
-    while (
-        place < quantity.after
-        and tokens[place].kind == "word"
-        and tokens[place].lower not in INTRODUCERS | {"of", "per", "out", "over", "during"}
-    ):
+    while place < quantity.after and tokens[place].kind == "word" and tokens[place].lower not in _AFTER_NOUNS:
         place += 1
     noun = printed.piece(start, place)
-    return "" if not noun or tokens[place - 1].lower in PEOPLE or quantity.time is None else noun
+    told = quantity.time is not None or (quantity.events is not None and quantity.events.lower == "no")
+    return noun if noun and told and tokens[place - 1].lower not in PEOPLE else ""
 
 
 def _behind(printed: Print, start: int, end: int) -> str:

@@ -9,7 +9,8 @@ import msgspec
 from fourcount.record.entry.pasted.heading_sets import by_case, corner_says, negated, roles_of
 from fourcount.record.entry.pasted.headings import Role, heading_words, is_sum, role_of
 from fourcount.record.entry.pasted.matrix import Matrix
-from fourcount.record.entry.pasted.quantities import Quantity, gives, nearly_gives
+from fourcount.record.entry.pasted.proportions import gives, nearly_gives
+from fourcount.record.entry.pasted.quantities import Quantity
 from fourcount.record.entry.tokens import Token
 from fourcount.record.outcome import Form
 

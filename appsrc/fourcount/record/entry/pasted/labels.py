@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 from collections.abc import Sequence
 
 from fourcount.record.entry.pasted.quantities import CLOSING, OPENING, Quantity
@@ -19,6 +20,7 @@ from fourcount.record.entry.tokens import Print, Token
 
 _MOST_WORDS = 9
 _FAR = 3
+_ALONE = ("without", "treated", "untreated")
 _WITH = ("with", "without")
 _JOINING = frozenset(("-", "/", "+", "&"))
 _ALWAYS_STOP = COMPARATORS | VERBS | {"respectively", "who", "which", "that", "p", "n", "as"}
@@ -120,7 +122,7 @@ class Labels:
         """Labels without the same "with" before both; "without" stays, and then so does its "with"."""
         labels = [first, second]
         for place, other in ((0, 1), (1, 0)):
-            if labels[place].casefold().startswith("with ") and not labels[other].casefold().startswith("without "):
+            if labels[place].casefold().startswith("with ") and not re.match("without\\b", labels[other].casefold()):
                 labels[place] = labels[place][5:]
         return labels[0], labels[1]
 
@@ -141,7 +143,7 @@ class Labels:
             elif self.tokens[place].lower in INTRODUCERS and self.tokens[place].lower not in ("before", "after"):
                 kept = None if kept is None or self.tokens[kept].lower not in ("not",) else kept
             place += 1
-        return self._collected(place, end, kept)
+        return self._collected(place, end, kept) or (token.text.rstrip(".") if token.lower in _ALONE else "")
 
     def _in_brackets(self, place: int, end: int) -> str:
         """The label in "18% of 220 (new lens)"."""

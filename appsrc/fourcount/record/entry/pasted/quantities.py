@@ -3,10 +3,11 @@
 from __future__ import annotations
 
 from collections.abc import Sequence
-from fractions import Fraction
+from itertools import pairwise
 
 import msgspec
 
+from fourcount.record.entry.pasted.proportions import gives
 from fourcount.record.entry.pasted.vocabulary import (
     DETERMINERS,
     JOINERS,
@@ -16,7 +17,6 @@ from fourcount.record.entry.pasted.vocabulary import (
     VERBS,
     time_of_people,
 )
-from fourcount.record.entry.percent import PrintedPercent, printed_percent, rounds_to
 from fourcount.record.entry.tokens import Token
 
 OPENING = ("(", "[", "{")
@@ -66,9 +66,16 @@ class Phrases:
             return None
         if token.percent:
             return self._from_percent(place)
-        if token.whole is None or token.whole > _LARGEST:
+        if token.whole is None or token.whole > _LARGEST or self._of_no_people(place + 1):
             return None
         return self._of_total(place) or self._over_time(place) or self._with_percent(place)
+
+    def _of_no_people(self, place: int) -> bool:
+        """Whether the nouns behind a number say that it counts hours, doses and the like ("38 hours of 40")."""
+        after = self._nouns(place, 3)
+        said = [self.at(step).lower for step in range(place, after + 1)]
+        timed = any(time_of_people(one, two) for one, two in pairwise(said))
+        return not timed and any(noun in TIME_UNITS or noun in NOT_COUNTED for noun in said[:-1])
 
     def _countable(self, place: int) -> bool:
         """Whether a number can be one of people: free, without a currency, a slash or a hyphen around it."""
@@ -309,22 +316,3 @@ class Phrases:
                 break
             place += 1
         return place
-
-
-def gives(percent: Token, events: int, total: int) -> bool:
-    """Whether so many of so many are the printed percentage."""
-    if not 0 <= percent.value <= 100:
-        return False
-    value = Fraction(f"{percent.value:.{percent.decimals}f}")
-    return rounds_to(PrintedPercent(value=value, decimals=percent.decimals), events, total)
-
-
-def nearly_gives(percent: Token, events: int, total: int) -> bool:
-    """Whether so many of so many are about the printed percentage, so that it may be a slip of print."""
-    return total > 0 and events <= total and abs(100 * events / total - percent.value) <= max(1.0, 0.1 * percent.value)
-
-
-def beside(count: str, percent: Token) -> str:
-    """A count with its percentage as a cell takes both; the count alone where no cell could hold the percentage."""
-    text = percent.text if percent.text[:1].isdigit() else f"0{percent.text}"
-    return f"{count} ({text}%)" if printed_percent(text) else count
