@@ -3,7 +3,9 @@
 from __future__ import annotations
 
 import pytest
+from msgspec import structs
 
+from forms import at_time, of_total, paired, person_time, strata
 from fourcount.appraisal import appraise as module
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import (
@@ -202,11 +204,43 @@ def test_a_cohort_has_attributable_fractions(appraised):
     assert extras.attributable_exposed.estimate == pytest.approx(2 / 3)
     assert extras.attributable_exposed.method == "miettinen-nurminen"
     assert extras.attributable_population.estimate == pytest.approx(0.5)
-    assert extras.attributable_population.method == "population-fraction"
+    assert extras.attributable_population.method == "attributable-population"
     assert extras.attributable_exposed.interval.low < 2 / 3 < extras.attributable_exposed.interval.high
-    below = appraised(*TABLE, design="cohort").extras
-    assert below.attributable_exposed.key == below.attributable_population.key == "ratio-below-one"
+    assert extras.prevented_exposed is None
     assert appraised(30, 70, 10, 90).extras.attributable_exposed is None
+
+
+def test_a_cohort_whose_exposed_fare_better_has_a_prevented_fraction(appraised):
+    """10% against 30%: two thirds of the events expected of the exposed are prevented (by algebra); in trials none."""
+    extras = appraised(10, 90, 30, 70, design="cohort").extras
+    assert extras.attributable_exposed.key == extras.attributable_population.key == "ratio-below-one"
+    assert extras.prevented_exposed.estimate == pytest.approx(2 / 3)
+    mirrored = appraised(10, 90, 30, 70).measures["risk_ratio"].interval
+    limits = extras.prevented_exposed.interval
+    assert (limits.low, limits.high) == (1 - mirrored.high, 1 - mirrored.low)
+    assert appraised(10, 90, 30, 70).extras.prevented_exposed is None
+    assert appraised(20, 80, 20, 80, design="cohort").extras.prevented_exposed is None
+
+
+@pytest.mark.parametrize("outcome", [person_time(), at_time(design="cohort"), strata()])
+def test_every_cohort_has_the_fraction_of_its_own_ratio(outcome):
+    """Of the rate ratio, of the printed risks' ratio, of the pooled ratio: all below 1 here."""
+    findings = appraise(outcome, Choices())
+    pooled = findings.strata.pooled["pooled_risk_ratio"] if findings.form == "strata" else None
+    ratio = pooled or findings.measures["rate_ratio" if findings.form == "person-time" else "risk_ratio"]
+    assert findings.extras.prevented_exposed.estimate == pytest.approx(1 - ratio.estimate)
+    assert findings.extras.prevented_exposed.method == ratio.method
+
+
+@pytest.mark.parametrize(
+    "outcome", [of_total(design="cohort"), person_time(), at_time(design="cohort"), strata(), paired("matched")]
+)
+def test_an_adjusted_ratio_beside_any_table_has_the_e_value(outcome):
+    """It has dealt with some confounding already (VanderWeele and Ding 2017): R + sqrt(R (R - 1)) of 1/0.5 is 3.41."""
+    printed = structs.replace(outcome, adjusted_measure="risk_ratio", adjusted_text="0.50 (0.40 to 0.62)")
+    found = appraise(printed, Choices()).extras.e_value
+    assert found.adjusted
+    assert found.estimate == pytest.approx(2 + 2**0.5)
 
 
 @pytest.mark.parametrize(

@@ -5,7 +5,7 @@ from __future__ import annotations
 import msgspec
 import pytest
 
-from forms import EVERY_FORM, effect_only, of_total, paired, person_time
+from forms import EVERY_FORM, at_time, effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import EValues, Extras, Figure, Fragility, Gap, Interval
 from fourcount.record.paper import Choices
@@ -86,6 +86,17 @@ def test_an_attributable_fraction_of_a_cohort_has_an_interval():
     """From the limits of its ratio."""
     line = lines_of(of_total((70, 409, 38, 412), design="cohort"))["attributable_exposed"]
     assert (line.estimate, line.interval) == ("46.1%", "22.2 to 62.8%")
+
+
+def test_where_the_exposed_fare_better_the_prevented_fraction_stands_alone():
+    """No reason why there is no attributable one beside it, and the method in the word of its own ratio."""
+    lines = lines_of(of_total(design="cohort"))
+    assert "attributable_exposed" not in lines
+    line = lines["prevented_exposed"]
+    assert (line.estimate, line.interval, line.detail) == ("46.1%", "22.2 to 62.8%", "score")
+    assert line.note.startswith("The share of the events expected of the exposed that the exposure prevented")
+    assert lines_of(at_time(design="cohort"))["prevented_exposed"].detail == "from the printed limits"
+    assert lines_of(strata())["prevented_exposed"].detail == "Mantel–Haenszel"
 
 
 def test_clusters_show_their_design_effect():

@@ -46,6 +46,34 @@ def test_the_formula_holds_the_readers_numbers(outcome, key, formula):
     assert rows_of(key, outcome)["Estimate"] == formula
 
 
+@pytest.mark.parametrize(
+    ("outcome", "key", "formula"),
+    [
+        (of_total((70, 409, 38, 412), design="cohort"), "attributable_exposed", "(1.8556 − 1)/1.8556 = 0.4611"),
+        (
+            of_total((70, 409, 38, 412), design="cohort"),
+            "attributable_population",
+            "70/108 × (1.8556 − 1)/1.8556 = 0.2989",
+        ),
+        (of_total(design="cohort"), "prevented_exposed", "1 − 0.5389 = 0.4611"),
+        (person_time(), "prevented_exposed", "1 − 0.5389 = 0.4611"),
+        (strata(), "prevented_exposed", "1 − 0.5474 = 0.4526"),
+    ],
+)
+def test_a_fraction_is_worked_out_from_its_ratio(outcome, key, formula):
+    """That of the population with the share of events among the exposed before it."""
+    assert rows_of(key, outcome)["Estimate"] == formula
+
+
+def test_levins_limits_stand_beside_those_of_the_population_fraction():
+    """Levin 1953 at the table's own exposure, 409 of 821: pe (R − 1)/(1 + pe (R − 1)) at each limit R of the ratio."""
+    outcome, share = of_total((70, 409, 38, 412), design="cohort"), 409 / 821
+    ratio = appraise(outcome, Choices()).measures["risk_ratio"].interval
+    low, high = (100 * share * (r - 1) / (1 + share * (r - 1)) for r in (ratio.low, ratio.high))
+    rows = rows_of("attributable_population", outcome)
+    assert rows["Attributable fraction in the population, from a given prevalence"] == f"{low:.1f} to {high:.1f}%"
+
+
 def test_a_stratum_shows_its_part_of_the_sums():
     """10 of 200 against 22 of 190: 10 × 190/390 and 22 × 200/390."""
     assert rows_of("pooled_risk_ratio", strata())["under 65"] == "a n2/N = 4.8718, c n1/N = 11.2821"

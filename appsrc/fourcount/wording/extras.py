@@ -25,6 +25,7 @@ from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
 from fourcount.wording.form import lacking
 from fourcount.wording.lines.line import MeasureLine, figure_line, withheld_line
+from fourcount.wording.lines.words import method_word
 from fourcount.wording.printed import paper_measure_name
 
 SCENARIOS = ("none", "all", "worst", "best", "ratio")
@@ -33,6 +34,7 @@ EXTRA_KEYS = (
     "recovered",
     "clusters",
     "attributable_exposed",
+    "prevented_exposed",
     "attributable_population",
     "e_value",
     "fragility",
@@ -47,6 +49,7 @@ NAMES = {
     "recovered-p": "From the printed p",
     "clusters": "Design effect of the clusters",
     "attributable_exposed": "Attributable fraction, exposed",
+    "prevented_exposed": "Prevented fraction, exposed",
     "attributable_population": "Attributable fraction, population",
     "e_value": "E-value",
     "fragility": "Fragility, beside the number lost",
@@ -76,13 +79,19 @@ LOST = "{lost} were lost"
 NOT_SAID = "how many were lost was not typed"
 OVERTURNED = "here the interval tells something else about no effect"
 TOO_NARROW = "interval too narrow, as if the lost had been seen"
-EXPOSED_NOTE = "The share of the events of the exposed that would not have been, if the ratio is all cause. {not_one}"
-POPULATION_NOTE = (
-    "The share of all events here that would not have been, if the ratio is all cause and people elsewhere are exposed "
-    "as these were. {not_one}"
-)
-LOG = "log"
 NOT_ONE = "It does not tell whose events those were."
+FRACTION_NOTES = {
+    "attributable_exposed": (
+        "The share of the events of the exposed that would not have been, if the ratio is all cause."
+    ),
+    "prevented_exposed": (
+        "The share of the events expected of the exposed that the exposure prevented, if the ratio is all cause."
+    ),
+    "attributable_population": (
+        "The share of all events here that would not have been, if the ratio is all cause and people elsewhere are "
+        "exposed as these were."
+    ),
+}
 CLUSTERS_NOTE = (
     "intervals and p rest on the counts divided by it; the risks stay. It is as good as the correlation that was typed"
 )
@@ -114,12 +123,19 @@ def extra_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -
         *_one("adjusted", case.extras.adjusted, case),
         *_one("recovered", case.extras.recovered, case),
         *_one("clusters", case.extras.clusters, case),
-        *_one("attributable_exposed", case.extras.attributable_exposed, case),
+        *_of_exposed(case),
         *_one("attributable_population", case.extras.attributable_population, case),
         *_one("e_value", case.extras.e_value, case),
         *_one("fragility", case.extras.fragility, case),
         *_losses(case),
     )
+
+
+def _of_exposed(case: _Case) -> tuple[MeasureLine, ...]:
+    """The share that the exposure explains, or prevents where the exposed fare better: never a reason beside it."""
+    if case.extras.prevented_exposed is not None:
+        return _one("prevented_exposed", case.extras.prevented_exposed, case)
+    return _one("attributable_exposed", case.extras.attributable_exposed, case)
 
 
 def _one(key: str, extra: object, case: _Case) -> tuple[MeasureLine, ...]:
@@ -179,7 +195,8 @@ def _e_value(found: EValues, case: _Case) -> MeasureLine:
     limit = "" if isinstance(found.limit, Gap) else E_VALUE_LIMIT.format(value=numbers.ratio(found.limit))
     converted = CONVERTED.get(found.converted, "")
     note = f"{E_VALUE_NOTE} {converted[:1].upper()}{converted[1:]}." if converted else E_VALUE_NOTE
-    measure = f"{'printed, adjusted ' if found.adjusted else ''}{paper_measure_name(found.measure, case.outcome)}"
+    which = "printed, adjusted " if found.adjusted else "pooled " if case.findings.form == "strata" else ""
+    measure = f"{which}{paper_measure_name(found.measure, case.outcome)}"
     return _line(
         "e_value",
         NAMES["e_value"],
@@ -198,15 +215,15 @@ def _fragility(found: Fragility, case: _Case) -> MeasureLine:
 
 
 def _attributable(key: str, figure: Figure, case: _Case) -> MeasureLine:
-    note = (EXPOSED_NOTE if key == "attributable_exposed" else POPULATION_NOTE).format(not_one=NOT_ONE)
-    below = _fraction_interval(figure.interval)
+    note = f"{FRACTION_NOTES[key]} {NOT_ONE}"
+    below = fraction_below_none(figure.interval)
     shown = structs.replace(figure, interval=Interval(low=0.0, high=1.0)) if below else figure
-    detail = LOG if figure.method == "population-fraction" else lines.family_name("risk_ratio", case.choices)
+    detail = method_word(figure.method, case.choices)
     line = figure_line(key, NAMES[key], shown, detail=detail, notes=(note,), group="more", kind="")
     return replace(line, interval=below or line.interval, low=None, estimate_value=None, high=None)
 
 
-def _fraction_interval(interval: limits.AnyInterval) -> str:
+def fraction_below_none(interval: limits.AnyInterval) -> str:
     """Limits of a fraction of which the lower lies below none, since the exposure may prevent as well; else ""."""
     if not isinstance(interval, Interval) or interval.low >= 0:
         return ""

@@ -12,14 +12,16 @@ from fourcount.appraisal.measures import Figures, Table, risk_difference, risk_r
 from fourcount.stats.losses import SCENARIOS, Lost, Scenario, imputed
 
 
-def loss_scenarios(table: Table, figures: Figures, losses: ReadLosses, clusters: ReadClusters) -> Losses | Gap | None:
+def loss_scenarios(
+    counts: Counts, table: Table, figures: Figures, losses: ReadLosses, clusters: ReadClusters
+) -> Losses | Gap | None:
     """Every scenario's risks, difference and ratio, and which of them tell something else about no effect.
 
     That of a ratio of risks is there only where the reader gave one.
     """
-    lost, counts = losses.lost, table.counts
-    if not isinstance(lost, Lost) or not isinstance(counts, Counts):
-        return lost if isinstance(lost, Gap) else None
+    lost = losses.lost
+    if not isinstance(lost, Lost):
+        return lost
     found: list[LossScenario] = []
     for key in SCENARIOS:
         if key == "ratio" and not losses.by_ratio:

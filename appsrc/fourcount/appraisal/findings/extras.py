@@ -79,12 +79,16 @@ class Recovered(msgspec.Struct, frozen=True, kw_only=True):
 
 
 class Extras(msgspec.Struct, frozen=True, kw_only=True):
-    """What stands under the fold. A Gap says why a part is not given; None where nobody would look for it."""
+    """What stands under the fold. A Gap says why a part is not given; None where nobody would look for it.
+
+    ``prevented_exposed`` is there where the exposed fare better, and ``attributable_exposed`` then is a Gap.
+    """
 
     e_value: EValues | Gap | None = None
     fragility: Fragility | Gap | None = None
     losses: Losses | Gap | None = None
     attributable_exposed: Figure | Gap | None = None
+    prevented_exposed: Figure | None = None
     attributable_population: Figure | Gap | None = None
     clusters: Clusters | Gap | None = None
     recovered: Recovered | Gap | None = None

@@ -7,7 +7,7 @@ import math
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.conversion import converted_figure
 from fourcount.appraisal.extras.e_values import E_VALUE_MEASURES, OBSERVATIONAL, e_values
-from fourcount.appraisal.extras.of_counts import outcome_is_common
+from fourcount.appraisal.extras.of_ratio import outcome_is_common
 from fourcount.appraisal.extras.printed import DIFFERENCES, PRINTED, USUAL_LEVEL, as_figure, read_effect
 from fourcount.appraisal.findings import (
     Conversion,

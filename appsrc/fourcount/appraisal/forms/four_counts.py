@@ -52,7 +52,7 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         conversion=conversion,
         patient=patient,
         marks=marks,
-        extras=extras_of_counts(outcome, table, figures, support, clusters, losses, adjusted, pace),
+        extras=extras_of_counts(outcome, counts, table, figures, clusters, losses, adjusted, pace),
         randomised=losses.randomised,
     )
     return whole(case, measures(figures, support, welcome=outcome.welcome), reading.totals)

@@ -6,12 +6,10 @@ from collections.abc import Callable
 
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import ReadClusters, clusters_of
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
-from fourcount.appraisal.extras.of_counts import outcome_is_common
-from fourcount.appraisal.extras.printed import ReadEffect, adjusted_of
+from fourcount.appraisal.extras.of_ratio import extras_of_ratio
+from fourcount.appraisal.extras.printed import adjusted_of
 from fourcount.appraisal.findings import (
     PAIR_MEASURES,
-    Extras,
     Figure,
     Gap,
     Interval,
@@ -63,21 +61,12 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         conversion=nothing,
         patient=nothing,
         marks=marks,
-        extras=_extras(outcome, figures, clusters, adjusted),
+        extras=extras_of_ratio(
+            outcome, figures.get("pair_odds_ratio"), "odds_ratio", adjusted, clusters=clusters.clusters
+        ),
     )
     measures = {key: _measure(key, figures, withheld, welcome=outcome.welcome) for key in PAIR_MEASURES}
     return whole(case, measures, totals)
-
-
-def _extras(outcome: Outcome, figures: dict[str, Figure], clusters: ReadClusters, adjusted: ReadEffect) -> Extras:
-    """A matched study's E-value, of its odds ratio."""
-    ratio = figures.get("pair_odds_ratio") if outcome.design in OBSERVATIONAL else None
-    common = outcome_is_common(outcome, None)
-    return Extras(
-        e_value=None if ratio is None else e_values(ratio, "odds_ratio", common=common),
-        clusters=clusters.clusters,
-        adjusted=adjusted.figure,
-    )
 
 
 def _lacking(reading: PairsReading) -> Gap | None:

@@ -4,12 +4,10 @@ from __future__ import annotations
 
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import ReadClusters, clusters_of
-from fourcount.appraisal.extras.attributable import of_exposed
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
-from fourcount.appraisal.extras.printed import ReadEffect, adjusted_of
+from fourcount.appraisal.extras.of_ratio import extras_of_ratio
+from fourcount.appraisal.extras.printed import adjusted_of
 from fourcount.appraisal.findings import (
     RATE_MEASURES,
-    Extras,
     Figure,
     Gap,
     Interval,
@@ -52,23 +50,12 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         conversion=nothing,
         patient=nothing,
         marks=marks,
-        extras=_extras(outcome, figures.get("rate_ratio"), clusters, adjusted),
+        extras=extras_of_ratio(outcome, figures.get("rate_ratio"), "rate_ratio", adjusted, clusters=clusters.clusters),
     )
     measures: dict[str, Measure] = {
         key: Gap(withheld[key]) if key in withheld else given_or_why(figures[key]) for key in RATE_MEASURES
     }
     return whole(case, measures, totals)
-
-
-def _extras(outcome: Outcome, ratio: Figure | None, clusters: ReadClusters, adjusted: ReadEffect) -> Extras:
-    """The E-value of the rate ratio outside trials, and a cohort's attributable fraction."""
-    observational = ratio is not None and outcome.design in OBSERVATIONAL
-    return Extras(
-        e_value=e_values(ratio, "rate_ratio", common=False) if ratio and observational else None,
-        attributable_exposed=of_exposed(ratio) if ratio and outcome.design == "cohort" else None,
-        clusters=clusters.clusters,
-        adjusted=adjusted.figure,
-    )
 
 
 _BLANK = PersonTimeReading(first=GroupRate(), second=GroupRate())

@@ -3,12 +3,10 @@
 from __future__ import annotations
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.extras.attributable import of_exposed
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
-from fourcount.appraisal.extras.printed import PRINTED, ReadEffect, adjusted_of
+from fourcount.appraisal.extras.of_ratio import extras_of_ratio
+from fourcount.appraisal.extras.printed import PRINTED, adjusted_of
 from fourcount.appraisal.findings import (
     TIMED_MEASURES,
-    Extras,
     Figure,
     Gap,
     Interval,
@@ -58,7 +56,7 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         conversion=nothing,
         patient=_patient(typed, figures, outcome) if "risk_ratio" in figures else nothing,
         marks=marks,
-        extras=_extras(outcome, figures.get("risk_ratio"), adjusted),
+        extras=extras_of_ratio(outcome, figures.get("risk_ratio"), "risk_ratio", adjusted),
     )
     measures: dict[str, Measure] = {}
     for key in TIMED_MEASURES:
@@ -79,16 +77,6 @@ def _patient(typed: Typed, figures: dict[str, Figure], outcome: Outcome) -> Pati
     if isinstance(start, Gap):
         return start
     return carry(figures, start, "risk_ratio", support, welcome=outcome.welcome)
-
-
-def _extras(outcome: Outcome, ratio: Figure | None, adjusted: ReadEffect) -> Extras:
-    """The E-value of the ratio outside trials, and a cohort's attributable fraction."""
-    observational = outcome.design in OBSERVATIONAL
-    return Extras(
-        e_value=e_values(ratio, "risk_ratio", common=False) if ratio and observational else None,
-        attributable_exposed=of_exposed(ratio) if ratio and outcome.design == "cohort" else None,
-        adjusted=adjusted.figure,
-    )
 
 
 _BLANK = RiskAtTimeReading(first=PrintedRisk(), second=PrintedRisk(), level=USUAL_LEVEL)

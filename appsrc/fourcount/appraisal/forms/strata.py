@@ -5,16 +5,14 @@ from __future__ import annotations
 from dataclasses import replace
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.clusters import clusters_of
+from fourcount.appraisal.clusters import ReadClusters, clusters_of
 from fourcount.appraisal.conversion import converted_figure
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
-from fourcount.appraisal.extras.of_counts import outcome_is_common
-from fourcount.appraisal.extras.printed import adjusted_of
+from fourcount.appraisal.extras.of_ratio import extras_of_ratio
+from fourcount.appraisal.extras.printed import ReadEffect, adjusted_of
 from fourcount.appraisal.findings import (
     MEASURES,
     Conversion,
     Counts,
-    EValues,
     Extras,
     Figure,
     Gap,
@@ -70,19 +68,19 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         conversion=conversion,
         patient=patient,
         marks=marks,
-        extras=Extras(e_value=_e_value(pooled, outcome, counts), clusters=clusters.clusters, adjusted=adjusted.figure),
+        extras=_extras(pooled, outcome, counts, adjusted, clusters),
         strata=parts,
     )
     return whole(case, measures(crude, support, welcome=outcome.welcome), totals)
 
 
-def _e_value(pooled: dict[str, Figure], outcome: Outcome, counts: Counts) -> EValues | Gap | None:
-    """Of the pooled ratio that the design gives, outside trials: the strata have dealt with what they are strata of."""
+def _extras(
+    pooled: dict[str, Figure], outcome: Outcome, counts: Counts, adjusted: ReadEffect, clusters: ReadClusters
+) -> Extras:
+    """Those of the pooled ratio that the design gives: the strata have dealt with what they are strata of."""
     measure = "odds_ratio" if outcome.design == "case-control" else "risk_ratio"
     ratio = pooled.get(f"pooled_{measure}")
-    if ratio is None or outcome.design not in OBSERVATIONAL:
-        return None
-    return e_values(ratio, measure, common=outcome_is_common(outcome, counts))
+    return extras_of_ratio(outcome, ratio, measure, adjusted, clusters=clusters.clusters, counts=counts)
 
 
 def _all_counts(readings: list[StratumReading], outcome: Outcome) -> tuple[Counts, ...] | Gap:

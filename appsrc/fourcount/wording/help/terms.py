@@ -181,10 +181,11 @@ TERMS = (
         ),
     ),
     (
-        "attributable fraction",
+        "attributable fraction, prevented fraction",
         (
             "The share of the events, of the exposed or of everybody, that would not have been without the exposure, "
-            "if the whole ratio is caused by it."
+            "if the whole ratio is caused by it. Where the exposed fare better, the share of the events expected of "
+            "them that the exposure prevented."
         ),
     ),
     (

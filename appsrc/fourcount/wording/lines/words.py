@@ -28,6 +28,7 @@ KINDS: dict[str, Kind] = {
     "pooled_risk_ratio": "ratio",
     "pooled_odds_ratio": "ratio",
     "attributable_exposed": "risk",
+    "prevented_exposed": "risk",
     "attributable_population": "risk",
 }
 """Measures of one kind are written alike and share a scale."""
@@ -49,6 +50,7 @@ METHOD_WORDS = {
     "wilson": "score",
     "clopper-pearson": "exact",
     "wald": "textbook",
+    "katz": "textbook",
     "log": "textbook",
     "score": "score",
     "exact": "exact",
@@ -57,6 +59,7 @@ METHOD_WORDS = {
     "greenland-robins": "Mantel–Haenszel",
     "robins-breslow-greenland": "Mantel–Haenszel",
     "square-and-add": "from the printed limits",
+    "attributable-population": "log",
     "printed": "as printed",
 }
 """A method in the word that its line has room for; its name in full stands in the working."""

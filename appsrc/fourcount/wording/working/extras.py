@@ -2,24 +2,44 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Clusters, EValues, Fragility, Gap, Losses, OutcomeFindings, Recovered
+from fourcount.appraisal.findings import (
+    Clusters,
+    Counts,
+    EValues,
+    Figure,
+    Fragility,
+    Gap,
+    Interval,
+    Losses,
+    OutcomeFindings,
+    Recovered,
+)
+from fourcount.record.outcome import Form
 from fourcount.record.paper import Choices
+from fourcount.stats.attributable import levin, levin_interval
 from fourcount.stats.entries.entry import Calculation
 from fourcount.stats.entries.extras import EXTRAS
 from fourcount.stats.entries.recovery import RECOVERIES
-from fourcount.wording import numbers
-from fourcount.wording.numbers import plain, quantity
-from fourcount.wording.working.parts import Row, about
+from fourcount.wording import limits, numbers
+from fourcount.wording.extras import fraction_below_none
+from fourcount.wording.form import measure_of
+from fourcount.wording.numbers import plain, quantity, whole
+from fourcount.wording.working.parts import ESTIMATE, OTHER_METHODS, SPACE, Row, about
 
 CALCULATIONS: dict[str, Calculation] = {entry.key: entry for entry in (*EXTRAS, *RECOVERIES)}
 ENTRIES = {
     "attributable_exposed": "attributable-exposed",
+    "prevented_exposed": "prevented-exposed",
     "attributable_population": "attributable-population",
     "e_value": "e-value",
     "fragility": "fragility",
     "clusters": "design-effect",
     "losses": "losses",
 }
+RATIOS: dict[Form, str] = {"person-time": "rate_ratio", "strata": "pooled_risk_ratio"}
+"""The ratio that a form's fractions are of, where it is not the risk ratio."""
+
+FRACTIONS = ("attributable_exposed", "prevented_exposed", "attributable_population")
 CONVERSIONS = {"odds_ratio": "e-value-odds", "hazard_ratio": "e-value-hazards"}
 
 
@@ -29,7 +49,9 @@ def extra_rows(key: str, findings: OutcomeFindings, _choices: Choices) -> tuple[
         return tuple(recovered_rows(findings))
     name = key.partition(".")[0]
     entry = CALCULATIONS.get(ENTRIES.get(name, ""))
-    return (*_numbers(name, findings), *([] if entry is None else about(entry)))
+    rows = _fraction(name, findings) if name in FRACTIONS else _numbers(name, findings)
+    rows += [] if entry is None else about(entry)
+    return (*rows, *(_levin(findings) if name == "attributable_population" else ()))
 
 
 def recovered_rows(findings: OutcomeFindings) -> list[Row]:
@@ -44,6 +66,42 @@ def recovered_rows(findings: OutcomeFindings) -> list[Row]:
         ("p", numbers.p_value(found.p)),
         *about(entry),
     ]
+
+
+def _fraction(name: str, findings: OutcomeFindings) -> list[Row]:
+    """A fraction's formula with the ratio in it; that of the population with the share of the events as well."""
+    ratio, found = _ratio(findings), getattr(findings.extras, name)
+    if ratio is None or isinstance(ratio.estimate, Gap) or not isinstance(found, Figure):
+        return []
+    if isinstance(found.estimate, Gap):
+        return []
+    r, result = plain(ratio.estimate), plain(found.estimate)
+    if name == "prevented_exposed":
+        return [(ESTIMATE, f"1 − {r} = {result}")]
+    share, counts = "", findings.counts
+    if name == "attributable_population" and isinstance(counts, Counts):
+        share = f"{whole(counts.index_events)}/{whole(counts.events)} × "
+    return [(ESTIMATE, f"{share}({r} − 1)/{r} = {result}")]
+
+
+def _levin(findings: OutcomeFindings) -> list[Row]:
+    """Levin's form at the exposure of the table's own people, which is the same fraction, with his limits."""
+    ratio, counts = _ratio(findings), findings.counts
+    if ratio is None or isinstance(ratio.estimate, Gap) or isinstance(counts, Gap):
+        return []
+    if not isinstance(ratio.interval, Interval):
+        return []
+    exposed = counts.index_total / counts.total
+    found = levin_interval(exposed, ratio.estimate, ratio.interval)
+    if isinstance(found, Gap):
+        return []
+    words = fraction_below_none(found) or limits.percent_interval(found, levin(exposed, ratio.estimate))
+    return [SPACE, ("", OTHER_METHODS), (CALCULATIONS["attributable-levin"].title, words)]
+
+
+def _ratio(findings: OutcomeFindings) -> Figure | None:
+    found = measure_of(RATIOS.get(findings.form, "risk_ratio"), findings)
+    return found if isinstance(found, Figure) else None
 
 
 def _numbers(name: str, findings: OutcomeFindings) -> list[Row]:
