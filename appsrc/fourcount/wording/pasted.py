@@ -33,6 +33,7 @@ DOUBTS = {
     "left-out": "A row or column was not understood, and left out.",
     "rates-unchecked": "The unit of person-time is not printed beside each number.",
     "comma-pairs": "A comma was taken as a border between two counts.",
+    "point-thousands": "Points in whole numbers were taken as marks of thousands.",
     "totals-disagree": "A total is not the sum of its counts.",
     "not-compared": "Nothing says that the two counts are of two groups.",
     "changed-count": "The counts may be of one group at two times.",

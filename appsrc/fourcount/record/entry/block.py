@@ -6,15 +6,17 @@ from collections.abc import Sequence
 
 import msgspec
 
-from fourcount.record.entry.pasted.columns import with_percentages, without_results
+from fourcount.record.entry.pasted.columns import with_percentages, with_risks, without_measures, without_results
+from fourcount.record.entry.pasted.effects import effects_alone, only_name
 from fourcount.record.entry.pasted.grid import read_grid
-from fourcount.record.entry.pasted.groups import Understood, agrees, two_groups
-from fourcount.record.entry.pasted.headings import is_sum
+from fourcount.record.entry.pasted.groups import two_groups
+from fourcount.record.entry.pasted.headings import is_sum, is_time
 from fourcount.record.entry.pasted.matrix import Matrix, matrix_of
 from fourcount.record.entry.pasted.pair_table import pair_table
 from fourcount.record.entry.pasted.proportions import beside
 from fourcount.record.entry.pasted.quantities import Quantity
 from fourcount.record.entry.pasted.strata_rows import Strata, strata_of
+from fourcount.record.entry.pasted.understood import Understood, agrees
 from fourcount.record.entry.printed import read_paper
 from fourcount.record.entry.readings import Pasted, PastedGroup
 from fourcount.record.entry.tokens import LONGEST_TEXT
@@ -35,12 +37,15 @@ def read_block(text: str) -> Pasted | None:
     whole = matrix_of(grid) if grid else None
     if grid is None or whole is None:
         return None
-    matrix = with_percentages(without_results(whole))
-    found = _understood(matrix, text)
-    if found is None:
-        return None
+    kept = without_measures(with_risks(whole))
+    matrix = with_percentages(without_results(kept)) if kept else None
+    found = _understood(matrix, text) if matrix else None
+    if matrix is None or found is None:
+        return effects_alone(whole, grid.results)
     doubts = dict.fromkeys((*found.ambiguous, *(("comma-pairs",) if grid.comma_pairs else ())))
+    said = only_name(text)
     pieces = [" ".join(piece.split()) for piece in (*matrix.results, *grid.results)]
+    pieces = [f"{said} {piece}" if said and piece[:1].isdigit() else piece for piece in pieces]
     paper = "; ".join(pieces)
     figures = tuple(figure for piece in pieces for figure in read_paper(piece, _usual(piece)).figures)
     return msgspec.structs.replace(
@@ -109,6 +114,7 @@ def _counts(found: Understood) -> tuple[int | None, ...]:
 
 
 def _table(found: Understood, doubts: Sequence[str], layout: Layout) -> Pasted:
+    doubts = (*doubts, "changed-count") if all(is_time(label) for label in found.labels) else doubts
     return Pasted(
         form=found.form,
         groups=_groups(found),
@@ -123,7 +129,7 @@ def _table(found: Understood, doubts: Sequence[str], layout: Layout) -> Pasted:
 
 def _heading(text: str) -> str:
     """A heading without what only says how its cells are printed."""
-    for ending in ("n/N (%)", "(n/N)", "n (%)", "no. (%)", "No. (%)", "N (%)", "n/N", "(%)", "(n)"):
+    for ending in ("% (95% CI)", "n/N (%)", "(n/N)", "n (%)", "no. (%)", "No. (%)", "N (%)", "n/N", "(%)", "(n)"):
         if text.endswith(ending):
             return text.removesuffix(ending).rstrip(" ,-:\u2013\u2014")
     return text

@@ -7,6 +7,7 @@ so that what goes into a field is what was printed.
 from __future__ import annotations
 
 import re
+from collections.abc import Sequence
 from math import inf
 from typing import Literal
 
@@ -100,15 +101,35 @@ def as_sentence(printed: Print) -> Print:
     """
     found: list[Token] = []
     for token in printed.tokens:
-        last = found[-1] if found else None
-        spaced = last is not None and printed.shown[last.end : token.start] == " "
-        if last and spaced and last.kind == token.kind == "number" and _continues(last, token):
-            text = printed.shown[last.start : token.start] + token.text
-            whole = (last.whole or 0) * 1000 + (token.whole or 0)
-            found[-1] = Token("number", text, last.start, token.end, "", float(whole), whole, 0, token.percent)
+        joined = _joined(printed, found, token)
+        if joined:
+            found[-1] = joined
         elif token.kind != "break":
             found.append(token)
     return Print(printed.shown, tuple(found))
+
+
+def with_totals_joined(printed: Print) -> Print:
+    """The same with thousands behind "n =" as one number though a space parts them ("n = 1 500")."""
+    found: list[Token] = []
+    for token in printed.tokens:
+        joined = _joined(printed, found, token) if [each.text for each in found[-2:-1]] == ["="] else None
+        if joined:
+            found[-1] = joined
+        else:
+            found.append(token)
+    return Print(printed.shown, tuple(found))
+
+
+def _joined(printed: Print, found: Sequence[Token], token: Token) -> Token | None:
+    """The number that two tokens with a space between them make, None where they are two numbers."""
+    last = found[-1] if found else None
+    spaced = last is not None and printed.shown[last.end : token.start] == " "
+    if last is None or not spaced or not last.kind == token.kind == "number" or not _continues(last, token):
+        return None
+    text = printed.shown[last.start : token.start] + token.text
+    whole = (last.whole or 0) * 1000 + (token.whole or 0)
+    return Token("number", text, last.start, token.end, "", float(whole), whole, 0, token.percent)
 
 
 def _continues(last: Token, token: Token) -> bool:

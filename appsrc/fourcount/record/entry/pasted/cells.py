@@ -6,11 +6,13 @@ from collections.abc import Sequence
 
 import msgspec
 
+from fourcount.record.entry.figure_names import name_at
 from fourcount.record.entry.pasted.quantities import CLOSING, OPENING, Phrases, Quantity
 from fourcount.record.entry.pasted.vocabulary import PEOPLE, time_of_people
-from fourcount.record.entry.tokens import Print, Token, as_sentence, take_apart
+from fourcount.record.entry.tokens import Print, Token, as_sentence, take_apart, with_totals_joined
 
 _LEAST_TOTAL = 10
+_P_WORDS = ("p", "p-value")
 _MOST_TOKENS = 150
 _BLANKS = frozenset(("-", "--", "---", "\u00b7", "...", "..", ".", "na", "n/a", "nr", "ns", "none", "reference", "ref"))
 _EVENT_NOUNS = frozenset(("events", "event", "deaths", "falls", "infections", "outcomes", "episodes", "with", "event"))
@@ -18,7 +20,11 @@ _NOT_A_LABEL = frozenset(("of", "out", "in", "per", "to", "n", "p", "ci", "and",
 
 
 class Cell(msgspec.Struct, frozen=True, kw_only=True):
-    """What stands in one cell. ``total`` is from "(n = 412)"; ``result`` is a printed effect or p as text."""
+    """What stands in one cell. ``total`` is from "(n = 412)"; ``result`` is a printed effect or p as text.
+
+    ``limits`` says that the result is two limits alone; ``risk`` is the result as a percentage with its limits, where
+    it may be one, ``counted`` a number with decimals before a count in brackets, if it is the percentage of that.
+    """
 
     text: str = ""
     label: str = ""
@@ -26,6 +32,9 @@ class Cell(msgspec.Struct, frozen=True, kw_only=True):
     quantity: Quantity | None = None
     decimal: Token | None = None
     result: str = ""
+    limits: bool = False
+    risk: Quantity | None = None
+    counted: Quantity | None = None
 
     @property
     def filled(self) -> bool:
@@ -59,7 +68,7 @@ class Cell(msgspec.Struct, frozen=True, kw_only=True):
 def delimited_cell(text: str) -> list[Cell]:
     """The cells in what stands between two borders: mostly one; several where spaces part numbers within it."""
     text = text.strip(" \u00a0\t\"'*")
-    printed = take_apart(text)
+    printed = with_totals_joined(take_apart(text))
     tokens = printed.tokens
     if not tokens or text.casefold().strip() in _BLANKS or not any(_tells(token) for token in tokens):
         return [Cell(text=text)]
@@ -91,7 +100,7 @@ def _value_behind_colon(tokens: Sequence[Token]) -> bool:
 
 def row_cells(text: str) -> list[Cell]:
     """The cells of a line without borders: its label, then each number with what belongs to it."""
-    return _cells(take_apart(text))
+    return _cells(with_totals_joined(take_apart(text)))
 
 
 def _cells(printed: Print) -> list[Cell]:
@@ -114,9 +123,12 @@ def _body(tokens: Sequence[Token]) -> int:
     """The place at which the numbers of a line begin: behind the last word that can only be of its label."""
     start = 0
     for place, token in enumerate(tokens):
-        if token.kind != "word" or token.lower in _NOT_A_LABEL or "value" in token.lower:
-            continue
         before = tokens[place - 1] if place else token
+        follows = tokens[place + 1] if place + 1 < len(tokens) else None
+        heading = token.lower == "ci" and before.percent and (follows is None or follows.text in CLOSING)
+        heading = heading or (token.lower == "p" and follows is None)
+        if token.kind != "word" or (token.lower in _NOT_A_LABEL and not heading) or "value" in token.lower:
+            continue
         unit = time_of_people(token.lower, tokens[place + 1].lower if place + 1 < len(tokens) else "")
         unit = unit or (place and time_of_people(before.lower, token.lower))
         if not (unit and any(each.kind == "number" for each in tokens[max(0, place - 2) : place])):
@@ -156,9 +168,16 @@ def _labels(printed: Print, after: int) -> list[Cell]:
         if printed.tokens[place].text in CLOSING and _total(printed.tokens[start : place + 1]):
             found.append(_label(printed, start, place + 1))
             start = place + 1
-    if start < after:
-        found.append(_label(printed, start, after))
+    for first, last in _named_results(printed.tokens, start, after) if start else [(start, after)]:
+        found.append(_label(printed, first, last))
     return [cell for cell in found if cell.label or cell.total]
+
+
+def _named_results(tokens: Sequence[Token], start: int, after: int) -> list[tuple[int, int]]:
+    """The places of headings such as "OR (95% CI)" and "P value" that stand side by side behind those of groups."""
+    begins = [place for place in range(start, after) if name_at(tokens, place) or tokens[place].lower in _P_WORDS]
+    begins = [start, *(place for place in begins if place > start)]
+    return [(one, two) for one, two in zip(begins, [*begins[1:], after], strict=True) if one < two]
 
 
 def _label(printed: Print, start: int, after: int) -> Cell:
@@ -220,6 +239,9 @@ def _cell_at(printed: Print, phrases: Phrases, place: int) -> tuple[Cell | None,
     if phrases.at(place + 1).lower == "per" and phrases.at(place + 2).kind == "number":
         base = place + 3
         return Cell(text=token.text), base + time_of_people(phrases.at(base).lower, phrases.at(base + 1).lower)
+    counted = _counted_behind(phrases, place)
+    if counted:
+        return Cell(text=printed.piece(place, counted.after), decimal=token, counted=counted), counted.after
     if token.whole is None and not token.percent and not time:
         return Cell(text=token.text, decimal=token), place + 1
     quantity = phrases.quantity_at(place)
@@ -228,6 +250,17 @@ def _cell_at(printed: Print, phrases: Phrases, place: int) -> tuple[Cell | None,
     if quantity is None:
         return None, place + 1
     return Cell(text=printed.piece(place, quantity.after), quantity=quantity), max(quantity.after, place + 1)
+
+
+def _counted_behind(phrases: Phrases, place: int) -> Quantity | None:
+    """``20.2 (41)``: a number with decimals and a count in brackets, a mean with a spread as well as a percentage."""
+    token, inside = phrases.at(place), phrases.at(place + 2)
+    decimal = token.decimals and not token.percent and 0 <= token.value <= 100
+    if not decimal or phrases.at(place + 1).text not in OPENING or inside.whole is None or inside.percent:
+        return None
+    if phrases.at(place + 3).text not in CLOSING:
+        return None
+    return Quantity(first=place, after=place + 4, events=inside, percent=token)
 
 
 def _timed(printed: Print, place: int, length: int) -> Cell:
@@ -253,9 +286,20 @@ def _result(printed: Print, phrases: Phrases, place: int) -> tuple[Cell, int] | 
         return None
     at = place + 2 if opened else place + 1
     low, between, high = phrases.at(at), phrases.at(at + 1), phrases.at(at + 2)
+    if _alone(token, phrases.at(place + 1), phrases.at(place + 2)):
+        text = printed.piece(place, place + 3)
+        return Cell(text=text, result=text, limits=True), place + 3
     limits = opened and low.kind == high.kind == "number" and between.lower in ("to", "-", ",", ";")
     if not limits or (token.whole is not None and not (low.decimals or high.decimals)):
         return None
     after = at + 3 + (phrases.at(at + 3).text in CLOSING)
     text = printed.piece(place, after)
-    return Cell(text=text, result=text), after
+    risk = 0 <= low.value <= token.value <= high.value <= 100
+    quantity = Quantity(first=place, after=after, percent=token, low=low, high=high) if risk else None
+    return Cell(text=text, result=text, risk=quantity), after
+
+
+def _alone(low: Token, between: Token, high: Token) -> bool:
+    """Whether two numbers with decimals are limits of an estimate in another cell: "0.46 to 0.91"."""
+    numbers = high.kind == "number" and between.lower in ("to", "-") and low.value <= high.value
+    return numbers and bool(low.decimals and high.decimals) and not low.percent

@@ -2,17 +2,22 @@
 
 from __future__ import annotations
 
+import re
 from collections.abc import Sequence
+from itertools import permutations
 
 import msgspec
 
 from fourcount.record.entry.pasted.cells import Cell
-from fourcount.record.entry.pasted.headings import Role, role_of
+from fourcount.record.entry.pasted.headings import Role, is_measure, role_of
 from fourcount.record.entry.pasted.matrix import Head, Matrix
 from fourcount.record.entry.pasted.proportions import gives, nearly_gives
 from fourcount.record.entry.pasted.quantities import Quantity
-from fourcount.record.entry.pasted.result_text import named_result
+from fourcount.record.entry.pasted.result_text import add_result
 from fourcount.record.entry.tokens import Token
+
+_LEVEL = re.compile(r"([0-9]{2}(?:\.[0-9])?) ?% ?-?(?:CI|CrI|confidence)", re.IGNORECASE)
+_MOST_COUNTS = 6
 
 
 def without_results(matrix: Matrix) -> Matrix:
@@ -26,6 +31,41 @@ def without_results(matrix: Matrix) -> Matrix:
     texts += _texts(matrix, [place for place in range(len(matrix.heads)) if place not in columns])
     texts += _texts(turned, [place for place in range(len(matrix.labels)) if place not in rows])
     return msgspec.structs.replace(matrix.only(rows, columns), results=tuple(texts))
+
+
+def without_measures(matrix: Matrix) -> Matrix | None:
+    """The matrix without rows and columns of something measured ("Age, years"); None where nothing else is there."""
+    turned = matrix.turned()
+    rows = [place for place, label in enumerate(matrix.labels) if not _is_measured(label, matrix.rows[place])]
+    columns = [place for place, head in enumerate(matrix.heads) if not _is_measured(head, turned.rows[place])]
+    return matrix.only(rows, columns) if rows and columns else None
+
+
+def _is_measured(head: Head, cells: Sequence[Cell]) -> bool:
+    counted = any(cell.quantity and cell.quantity.events for cell in cells)
+    shared = any(cell.quantity and cell.quantity.percent and cell.quantity.percent.percent for cell in cells)
+    return counted and not shared and is_measure(head.label)
+
+
+def with_risks(matrix: Matrix) -> Matrix:
+    """The matrix with "9.1 (6.4-12.8)" as a percentage and its limits where a heading or a label says percent.
+
+    "20.2 (41)" is a percentage with its count where the total proves it.
+    """
+    rows = [list(row) for row in matrix.rows]
+    for row, label in enumerate(matrix.labels):
+        for column, head in enumerate(matrix.heads):
+            told = next((each.label for each in (head, label) if role_of(each.label) == "percent"), None)
+            risk = rows[row][column].risk
+            counted, total = rows[row][column].counted, head.total or label.total
+            if counted and counted.percent and counted.events and total:
+                if gives(counted.percent, counted.events.whole or 0, total.whole or 0):
+                    rows[row][column] = Cell(text=rows[row][column].text, quantity=counted)
+            elif told is not None and risk:
+                level = _LEVEL.search(told)
+                risk = msgspec.structs.replace(risk, level_text=f"{level[1]}%" if level else "")
+                rows[row][column] = Cell(text=rows[row][column].text, quantity=risk)
+    return msgspec.structs.replace(matrix, rows=tuple(tuple(row) for row in rows))
 
 
 def _is_result(matrix: Matrix, column: int) -> bool:
@@ -45,14 +85,14 @@ def _texts(matrix: Matrix, columns: Sequence[int]) -> list[str]:
 
     A column of rates is not a result of the comparison and gives none.
     """
-    found = []
+    found: list[str] = []
     for column in columns:
         head = matrix.heads[column].label
         role = role_of(head)
         cells = [row[column] for row in matrix.rows if row[column].filled]
         if role == "rate" or not cells:
             continue
-        found.append(named_result(head, "p" if cells[0].decimal and not head else role, cells[0]))
+        add_result(found, head, "p" if cells[0].decimal and not head else role, cells[0])
     return found
 
 
@@ -60,12 +100,15 @@ def with_percentages(matrix: Matrix) -> Matrix:
     """The matrix with columns of percentages put beside the counts that they are of."""
     rows = [list(row) for row in matrix.rows]
     gone: list[int] = []
-    for column in range(1, len(matrix.heads)):
+    for column in range(len(matrix.heads)):
         percents = [_percent(row[column], matrix.heads[column]) for row in rows]
         told = [percent for percent in percents if percent]
         if not told or any(row[column].filled and not percent for row, percent in zip(rows, percents, strict=True)):
             continue
-        target = _target(rows, percents, matrix.heads, [place for place in range(column) if place not in gone])
+        others = [place for place in range(len(matrix.heads)) if place != column and place not in gone]
+        target = _proven(rows, percents, others)
+        if target is None:
+            target = _target(rows, percents, matrix.heads, [place for place in others if place < column])
         if target is None or not _is_percentage(matrix, percents, column, target):
             continue
         for row, percent in zip(rows, percents, strict=True):
@@ -119,6 +162,19 @@ def _percent(cell: Cell, head: Head) -> Token | None:
     count = cell.count
     whole = count is not None and (count.whole or 0) <= 100 and role_of(head.label) == "percent"
     return count if whole and cell.quantity and cell.quantity.percent is None else None
+
+
+def _proven(rows: Sequence[Sequence[Cell]], percents: Sequence[Token | None], others: Sequence[int]) -> int | None:
+    """The column of counts that every percentage is exactly what it gives of another column."""
+    told = [place for place, percent in enumerate(percents) if percent and percent.decimals]
+    counts = [place for place in others if all(rows[row][place].count for row in told)]
+    if len(told) < 2 or len(counts) > _MOST_COUNTS:
+        return None
+    for part, whole in permutations(counts, 2):
+        pairs = [(percents[row], rows[row][part].count, rows[row][whole].count) for row in told]
+        if all(one and two and three and gives(one, two.whole or 0, three.whole or 0) for one, two, three in pairs):
+            return part
+    return None
 
 
 def _target(

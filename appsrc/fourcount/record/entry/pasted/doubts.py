@@ -16,6 +16,7 @@ PASTE_DOUBTS = (
     "left-out",  # a row or column was not understood and left out
     "rates-unchecked",  # events and person-time, whose unit was not printed beside each
     "comma-pairs",  # a comma was taken as a border between two counts, not as a thousands mark
+    "point-thousands",  # points in whole numbers were taken as thousands marks, beside decimal commas
     "totals-disagree",  # a total is not the sum of its counts
     "not-compared",  # nothing says that the two counts are of two groups
     "changed-count",  # a rise or a fall: the counts may be those of one group at two times

@@ -15,6 +15,7 @@ MOST_ROWS = 60
 MOST_COLUMNS = 24
 LONGEST_RESULT = 200
 _RULE = re.compile(r"[\s|+:=_-]*")
+_CAPTION = re.compile(r"\s*(?:Supplement\w* |Appendix )?(?:Table|Figure|Box) [A-Z]?[0-9]+[.:]? +[^\t|]*$")
 _GAP = re.compile(r"[ \u00a0]{2,}| \| ?")
 _PAIR = re.compile(r"[0-9]{1,3},[0-9]{3}")
 _BARE = re.compile(r"[0-9]{1,3}(?:,[0-9]{3})+")
@@ -35,6 +36,7 @@ def read_grid(text: str) -> Grid | None:
     printed = [line for line in presentable(text).split("\n") if not _RULE.fullmatch(line)]
     if not printed or len(printed) > MOST_ROWS:
         return None
+    printed = [line for line in printed if not _CAPTION.match(line)] or printed
     results = tuple(line.strip() for line in printed if _is_result(line))
     lines = [line for line in printed if line.strip() not in results]
     if not lines:

@@ -7,28 +7,16 @@ from collections.abc import Callable, Sequence
 import msgspec
 
 from fourcount.record.entry.pasted.heading_sets import by_case, corner_says, negated, roles_of
-from fourcount.record.entry.pasted.headings import Role, heading_words, is_sum, role_of
+from fourcount.record.entry.pasted.headings import Role, heading_words, is_sum, role_of, time_unit
 from fourcount.record.entry.pasted.matrix import Matrix
 from fourcount.record.entry.pasted.proportions import gives, nearly_gives
+from fourcount.record.entry.pasted.proven import proven_total
 from fourcount.record.entry.pasted.quantities import Quantity
+from fourcount.record.entry.pasted.understood import Understood, agrees
 from fourcount.record.entry.tokens import Token
 from fourcount.record.outcome import Form
 
 _MEASURES = ("total", "others", "percent", "time", "rate", "events")
-
-
-class Understood(msgspec.Struct, frozen=True, kw_only=True):
-    """One way to understand a block: the form, the two groups and how much speaks for it."""
-
-    form: Form
-    quantities: tuple[Quantity, Quantity]
-    labels: tuple[str, str]
-    left_heading: str = ""
-    right_heading: str = ""
-    unit: str = ""
-    doubts: tuple[str, ...] = ()
-    score: int = 0
-    others: tuple[Token, ...] = ()
 
 
 def two_groups(matrix: Matrix) -> Understood | None:
@@ -38,8 +26,11 @@ def two_groups(matrix: Matrix) -> Understood | None:
     score = 0
     roles = roles_of(matrix.heads)
     labels = [role_of(label.label) for label in matrix.labels]
-    if negated(matrix.labels) and not any(head.label for head in matrix.heads):
+    states = {"events", "others"}
+    if negated(matrix.labels) and (not any(head.label for head in matrix.heads) or states <= set(roles)):
         labels = []
+    if negated(matrix.heads) and states <= set(labels):
+        roles = ["unknown"] * len(roles)
     score -= 6 * any(role in ("time", "percent") for role in labels)
     told = not negated(matrix.heads) or any(label.label for label in matrix.labels)
     roles = roles if told else ["unknown"] * len(roles)
@@ -76,17 +67,6 @@ def _left_out(matrix: Matrix, found: Understood) -> bool:
     return False
 
 
-def agrees(quantity: Quantity, found: Understood) -> bool:
-    """Whether a printed percentage is what the count gives of its group."""
-    if quantity.percent is None or quantity.events is None:
-        return True
-    whole = quantity.total.whole if quantity.total else None
-    if whole is None and found.others:
-        other = found.others[[each.events for each in found.quantities].index(quantity.events)]
-        whole = (quantity.events.whole or 0) + (other.whole or 0)
-    return whole is None or gives(quantity.percent, quantity.events.whole or 0, whole)
-
-
 def _complete(matrix: Matrix) -> Understood | None:
     """Columns whose every cell holds a whole group: ``38/412``, ``38 of 412``, ``38/4120 py``, ``9% (6-12)``."""
     whole = [place for place in range(len(matrix.heads)) if all(_whole(row[place].quantity) for row in matrix.rows)]
@@ -97,6 +77,11 @@ def _complete(matrix: Matrix) -> Understood | None:
         return None
     doubts = ("several-rows",) if len(whole) > 1 else ()
     form: Form = "events-of-total"
+    unit = time_unit(matrix.heads[whole[0]].label)
+    if unit and first.events and not first.time:
+        first, second = (
+            msgspec.structs.replace(each, time=each.total, total=None, unit=unit) for each in (first, second)
+        )
     if first.time:
         form = "person-time"
     elif first.events is None:
@@ -110,6 +95,10 @@ def _complete(matrix: Matrix) -> Understood | None:
         doubts=doubts,
         score=3 - len(whole),
     )
+
+
+def _over_time(quantity: Quantity, unit: str) -> Quantity:
+    return msgspec.structs.replace(quantity, time=quantity.total, total=None, unit=unit)
 
 
 def _whole(quantity: Quantity | None) -> bool:
@@ -136,7 +125,16 @@ def _counted(matrix: Matrix, roles: Sequence[Role]) -> Understood | None:
         return found
     if len(columns) == 1:
         return _without_totals(matrix, columns[0])
-    return _by_roles(matrix, columns, roles) or _by_order(matrix, columns)
+    found = _by_roles(matrix, columns, roles) or _by_order(matrix, columns)
+    proven = proven_total(matrix, columns)
+    if proven is None or (found and all(agrees(each, found) for each in found.quantities)):
+        return found
+    pair = _with_totals(matrix, proven[0], _tokens(matrix, proven[1]))
+    heading = matrix.heads[proven[0]].label
+    doubts = ("left-out",) if len(columns) > 2 else ()
+    return pair and Understood(
+        form="events-of-total", quantities=pair, labels=("", ""), left_heading=heading, doubts=doubts, score=4
+    )
 
 
 def _unit(matrix: Matrix, column: int) -> bool:
@@ -285,7 +283,8 @@ def _by_order(matrix: Matrix, columns: Sequence[int]) -> Understood | None:
             heading = matrix.heads[first].label
             return Understood(form="events-of-total", quantities=pair, labels=("", ""), left_heading=heading, score=3)
     told = all(matrix.heads[place].label for place in columns)
-    surely = told or any(_count(matrix, row, events) > _count(matrix, row, second) for row in (0, 1))
+    above = [_count(matrix, row, events) - _count(matrix, row, second) for row in (0, 1)]
+    surely = told or min(above) < 0 < max(above)
     surely = surely or together or _percent_fits(matrix, events, second, nearly_gives, together=True)
     return _two_outcomes(matrix, events, second, score=1, doubts=() if surely else ("others-or-totals",))
 

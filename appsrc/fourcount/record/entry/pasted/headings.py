@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import re
 from collections.abc import Callable
+from itertools import pairwise
 from typing import Literal
 
 from fourcount.record.entry.pasted.vocabulary import PEOPLE, time_of_people
@@ -12,10 +13,23 @@ from fourcount.record.entry.word_list import words
 Role = Literal["events", "total", "others", "percent", "time", "rate", "result", "p", "unknown"]
 
 _WORD = re.compile(r"[^\W_]+(?:['-][^\W_]+)*|[%+\u2713]|(?<!\w)-(?!\w)")
+_NUMBER_SHORT = re.compile(r"\b[Nn]os?\.")
+_MEASURED = re.compile(r"\b(mean|median|average|sd|iqr|scores?|bmi)\b|^age$", re.IGNORECASE)
+_UNIT_BEHIND = re.compile(
+    r"(?:[,(\[] ?| [-\u2013] )(years?|yrs?|months?|weeks?|days?|hours?|h|minutes?|min|kg|g|cm|mm|mm ?hg|kg/m.*|mg.*"
+    r"|mmol.*|points?|units?|litres?|ml)[)\]]?$",
+    re.IGNORECASE,
+)
+_TIME = re.compile(
+    r"(at |after |before |by )?(baseline|follow-up|before|after|first visit|second visit|start|end"
+    r"|(week|month|day|year|visit|hour)s? [0-9]+|[0-9]+ ?(weeks?|months?|days?|years?|hours?))( of .*)?"
+    r"|(pre|post)-?(test|treatment|intervention|op|operative)?|(before|after) .*",
+    re.IGNORECASE,
+)
 _TOTAL = frozenset(
     words(
         "total totals n number all randomised randomized denominator size sample enrolled overall analysed analyzed "
-        "treated assigned allocated tested"
+        "treated assigned allocated tested assessed evaluated examined eligible included followed"
     )
 )
 _OTHERS = frozenset(
@@ -68,7 +82,7 @@ def _has_time(found: list[str], said: set[str]) -> bool:
 def _is_result(found: list[str], said: set[str]) -> bool:
     if not _RESULT & said or said & {"without", "not"}:
         return False
-    return len(said & _RESULT) > 1 or found[0] in _RESULT or "ratio" in said
+    return len(said & _RESULT) > 1 or found[0] in _RESULT or bool({"ratio", "difference"} & said)
 
 
 def _is_rate(_: list[str], said: set[str]) -> bool:
@@ -77,14 +91,18 @@ def _is_rate(_: list[str], said: set[str]) -> bool:
 
 def _is_counted_percent(_: list[str], said: set[str]) -> bool:
     counts = {"n", "no", "number", "events"} & said
-    return bool(counts) and bool({"%", "with", "events", "affected", "event", "died"} & said)
+    return bool(counts) and bool({"%", "with", "events", "affected", "event", "died"} & said) and "without" not in said
 
 
 def _is_total(found: list[str], said: set[str]) -> bool:
     if said == {"no"}:
         return False
-    people = said <= {"n", "no", "number", "of"} | PEOPLE - {"cases", "controls", "survivors", "survivor"}
-    return people or (found[0] in _TOTAL and len(found) <= 3 and not said & _EVENTS)
+    numbered = {"n", "number", "of", "the", "in"}
+    people = numbered | {"no", "group"} | PEOPLE - {"cases", "controls", "survivors", "survivor"}
+    if said <= people or {"at", "risk"} <= said:
+        return True
+    whole = bool(said & _TOTAL - numbered) if found[0] in numbered else found[0] in _TOTAL
+    return whole and len(found) <= 4 and not said & _EVENTS
 
 
 _RULES: tuple[tuple[Role, Callable[[list[str], set[str]], bool]], ...] = (
@@ -96,6 +114,7 @@ _RULES: tuple[tuple[Role, Callable[[list[str], set[str]], bool]], ...] = (
     ("events", _is_counted_percent),
     ("percent", lambda _, said: "%" in said),
     ("total", _is_total),
+    ("events", lambda found, said: found[0] in ("n", "number") and not _OTHERS & said - {"n", "number"}),
     ("others", lambda _, said: bool(_OTHERS & said)),
     ("percent", lambda _, said: bool(_PERCENT & said)),
     ("events", lambda _, said: bool(_EVENTS & said)),
@@ -103,8 +122,32 @@ _RULES: tuple[tuple[Role, Callable[[list[str], set[str]], bool]], ...] = (
 """What a heading has to hold for each role; the first rule that holds decides."""
 
 
+def time_unit(text: str) -> str:
+    """The unit of person-time in a heading such as "events/person-years", "" where it names none."""
+    found = heading_words(text)
+    if "per" in found:
+        return ""
+    for one, two in pairwise([*found, ""]):
+        if length := time_of_people(one, two):
+            return one if length == 1 else f"{one} {two}"
+    return ""
+
+
+def is_measure(text: str) -> bool:
+    """Whether a label is of something measured ("Age, years", "Pain score"), whose numbers are no counts."""
+    if {"n", "no", "%", "number"} & set(heading_words(text)) or role_of(text) in ("time", "rate"):
+        return False
+    return bool(_MEASURED.search(text) or _UNIT_BEHIND.search(text))
+
+
+def is_time(text: str) -> bool:
+    """Whether a label is a point of time ("Baseline", "Week 12", "after 6 months")."""
+    return bool(_TIME.fullmatch(text.strip(" :,.")))
+
+
 def heading_words(text: str) -> list[str]:
-    """The words of a heading in small letters."""
+    """The words of a heading in small letters; "No." is a number, "no" is not."""
+    text = _NUMBER_SHORT.sub("number", text)
     return [word.casefold() for word in _WORD.findall(text.replace("n/N", "n").replace("n (%)", "n %"))]
 
 

@@ -11,10 +11,14 @@ import msgspec
 from fourcount.record.entry.pasted.cells import Cell
 from fourcount.record.entry.pasted.grid import Grid
 from fourcount.record.entry.pasted.headings import is_sum, role_of
-from fourcount.record.entry.pasted.result_text import named_result
+from fourcount.record.entry.pasted.result_text import add_result
 from fourcount.record.entry.tokens import Token
+from fourcount.record.entry.word_list import words
 
 EMPTY = Cell()
+_WORDS = re.compile(r"[^\s(]+(?: ?\([^()]*\))?")
+_NUMBERED = frozenset(words("centre center site hospital clinic trial study stratum cluster group arm year ward"))
+_CORNER = frozenset(words("outcome outcomes event events variable characteristic characteristics endpoint end-point"))
 
 
 class Head(msgspec.Struct, frozen=True):
@@ -57,7 +61,7 @@ def matrix_of(grid: Grid) -> Matrix | None:
     body = [place for place, row in enumerate(rows) if any(cell.filled for cell in row)]
     if not body:
         return None
-    lead = min(_lead(rows[place]) for place in body)
+    lead = min(_lead(rows[place]) for place in body) or int(_numbered_labels(rows[: body[0]]))
     width = _width([rows[place] for place in body], lead)
     if width < 1:
         return None
@@ -81,18 +85,33 @@ def matrix_of(grid: Grid) -> Matrix | None:
 
 def _without_result_lines(rows: Sequence[Sequence[Cell]]) -> tuple[tuple[str, ...], list[Sequence[Cell]]]:
     """Lines that hold only printed results, as text, and the other rows."""
-    texts, kept = [], []
+    texts: list[str] = []
+    kept: list[Sequence[Cell]] = []
     for row in rows:
         filled = [cell for cell in row if cell.filled]
-        if filled and all(cell.result for cell in filled):
-            label = " ".join(cell.label for cell in row if cell.label)
-            pieces = [
-                named_result(label if not place else "", role_of(label), cell) for place, cell in enumerate(filled)
-            ]
-            texts.append(", ".join(pieces))
-        else:
+        label = " ".join(cell.label for cell in row if cell.label)
+        if not filled or not (all(cell.result for cell in filled) or _is_one_result(label, filled)):
             kept.append(row)
-    return (tuple(texts), kept) if kept else ((), list(rows))
+            continue
+        above = kept[-1][0].label if kept and len(kept[-1]) == 1 else ""
+        if not label and role_of(above) == "result" and kept[-1][0].empty is False:
+            label = above
+            kept.pop()
+        pieces: list[str] = []
+        if filled[0].limits:
+            add_result(texts, label, role_of(label), filled[0])
+            filled = filled[1:]
+        for place, cell in enumerate(filled):
+            add_result(pieces, label if not place else "", role_of(label), cell)
+        texts += [", ".join(pieces)] if pieces else []
+    return (tuple(texts), kept) if any(cell.filled for row in kept for cell in row) else ((), list(rows))
+
+
+def _is_one_result(label: str, filled: Sequence[Cell]) -> bool:
+    """Whether a line holds one number that its label calls an effect ("Risk difference 15.2% (8.8 to 22.0)")."""
+    quantity = filled[0].quantity
+    counted = quantity is not None and quantity.events is not None
+    return len(filled) == 1 and not counted and role_of(label) == "result"
 
 
 def _lead(row: Sequence[Cell]) -> int:
@@ -121,6 +140,12 @@ def _line(row: Sequence[Cell], lead: int, width: int) -> tuple[Head, tuple[Cell,
     return Head(text, total), tuple((cells + [EMPTY] * width)[:width])
 
 
+def _numbered_labels(above: Sequence[Sequence[Cell]]) -> bool:
+    """Whether the first column holds numbers that are names, such as those of centres."""
+    first = next((row[0].label.casefold() for row in above[::-1] if len(row) > 2), "")
+    return first in _NUMBERED
+
+
 def _all_totals(row: Sequence[Cell]) -> bool:
     return sum(cell.total is not None for cell in row) > 1
 
@@ -130,8 +155,9 @@ def _heads(rows: Sequence[Sequence[Cell]], lead: int, width: int) -> tuple[tuple
     labels: list[list[str]] = [[] for _ in range(width)]
     totals: list[Token | None] = [None] * width
     corner = ""
+    parted = any(len(row) > 1 for row in rows)
     for row in rows:
-        cells = _aligned(row, lead, width)
+        cells = None if parted and len(row) == 1 and not row[0].total and width > 1 else _aligned(row, lead, width)
         if cells is None:
             continue
         if len(row) > width and lead and row[0].label:
@@ -150,9 +176,11 @@ def _aligned(row: Sequence[Cell], lead: int, width: int) -> list[Cell] | None:
     while len(cells) > lead + width and cells[-1].empty:
         cells.pop()
     if len(cells) == 1 and not cells[0].total and lead + width > 1:
-        cells = [Cell(text=word, label=word) for word in re.split(r"\s+", cells[0].label)]
+        cells = [Cell(text=word, label=word) for word in _WORDS.findall(cells[0].label)]
         if len(cells) not in (width, width + lead):
             return None
+    if len(cells) == width and lead:
+        cells[0] = _without_corner(cells[0])
     if len(cells) == lead + width:
         cells = cells[lead:]
     elif len(cells) > width:
@@ -168,6 +196,12 @@ def _aligned(row: Sequence[Cell], lead: int, width: int) -> list[Cell] | None:
             [cell for cell in told for _ in range(width // len(told))] if spread else (cells + [EMPTY] * width)[:width]
         )
     return cells
+
+
+def _without_corner(cell: Cell) -> Cell:
+    """The first heading without the word for the column of labels before it ("Outcome Treatment (N=88)")."""
+    corner, _, rest = cell.label.partition(" ")
+    return msgspec.structs.replace(cell, label=rest) if rest and corner.casefold() in _CORNER else cell
 
 
 def _sections(

@@ -12,7 +12,9 @@ _BRACKET = re.compile(r"[(\[]")
 
 
 def named_result(head: str, role: Role, cell: Cell) -> str:
+    """A result behind its name, with the level of its heading inside its bracket."""
     text = cell.result or cell.text
+    text += ")" if "(" in text and ")" not in text else ""
     if role == "p" or text.startswith("P "):
         number = text.removeprefix("P ").removeprefix("p ").strip()
         return f"P {number}" if number[:1] in "<>=" else (number if number[:1] in "pP" else f"P = {number}")
@@ -21,3 +23,12 @@ def named_result(head: str, role: Role, cell: Cell) -> str:
     if interval:
         text = _BRACKET.sub(lambda match: f"{match[0]}{interval[1]} ", text, count=1)
     return f"{name} {text}".strip()
+
+
+def add_result(texts: list[str], head: str, role: Role, cell: Cell) -> None:
+    """Put a result to the others; limits that stand in a column or a line of their own belong to the one before."""
+    if not cell.limits:
+        texts.append(named_result(head, role, cell))
+    elif texts and not texts[-1].endswith(")") and not texts[-1].startswith(("P ", "p ")):
+        level = _INTERVAL.search(head)
+        texts[-1] += f" ({level[1]} {cell.result})" if level else f" ({cell.result})"

@@ -6,10 +6,11 @@ from collections.abc import Sequence
 
 import msgspec
 
-from fourcount.record.entry.pasted.groups import Understood, two_groups
+from fourcount.record.entry.pasted.groups import two_groups
 from fourcount.record.entry.pasted.headings import is_sum, role_of
 from fourcount.record.entry.pasted.matrix import Head, Matrix
 from fourcount.record.entry.pasted.quantities import Quantity
+from fourcount.record.entry.pasted.understood import Understood
 from fourcount.record.entry.tokens import Token
 
 
