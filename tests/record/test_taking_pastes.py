@@ -13,6 +13,7 @@ from fourcount.record.outcome import (
     EventsOfTotal,
     Outcome,
     Pairs,
+    Patient,
     PersonTime,
     RiskAtTime,
     Strata,
@@ -153,3 +154,57 @@ def test_printed_limits_take_the_level_that_stands_beside_them(level):
         second_right_text="13 to 21%",
         limits_level_text=level,
     )
+
+
+FULL = Outcome(
+    name_text="Falls",
+    table=EventsAndOthers(first_left_text="38", first_right_text="374", second_left_text="70", second_right_text="339"),
+    design="cohort",
+    first_label_text="night lights",
+    second_label_text="usual care",
+    left_heading_text="fell",
+    right_heading_text="did not fall",
+    right_words_text="did not fall",
+    span_text="12 months",
+    index_group="second",
+    counted="right",
+    paper_text=TEXT,
+    adjusted_text="OR 0.47 (0.30 to 0.72)",
+    adjusted_for_text="age",
+    first_lost_text="18",
+    icc_text="0.02",
+    patient=Patient(starting_risk_text="12%"),
+)
+
+
+def test_another_table_brings_none_of_the_last_ones_words_and_results():
+    """Counts of other groups over counts that were there: only the study and how its groups run stay."""
+    others = (PastedGroup(left_text="23", right_text="204", label="coaching"), GROUPS[1])
+    pasted = Pasted(form="events-of-total", groups=others, words="were readmitted", source="sentence")
+    assert editing.brings_another_table(FULL, pasted)
+    assert editing.take_paste(FULL, pasted) == Outcome(
+        design="cohort",
+        table=EventsOfTotal(
+            first_left_text="23", first_right_text="204", second_left_text="70", second_right_text="409"
+        ),
+        first_label_text="coaching",
+        second_label_text="usual care",
+        left_words_text="were readmitted",
+    )
+
+
+@pytest.mark.parametrize("label", ["", "Night lights"])
+def test_counts_of_the_same_groups_leave_all_else(label):
+    """Bare counts, or counts under the labels that are there, are a correction."""
+    group = PastedGroup(left_text="39", right_text="412", label=label)
+    pasted = Pasted(form="events-of-total", groups=(group, GROUPS[1]))
+    assert not editing.brings_another_table(FULL, pasted)
+    after = editing.take_paste(FULL, pasted)
+    assert (after.counted, after.paper_text, after.name_text) == ("right", TEXT, "Falls")
+
+
+def test_words_typed_before_any_count_stay():
+    """An empty table has nothing that a paste could be another one than."""
+    before = Outcome(name_text="Falls", span_text="12 months", paper_text=TEXT)
+    after = editing.take_paste(before, Pasted(form="events-of-total", groups=GROUPS, words="fell"))
+    assert (after.name_text, after.span_text, after.paper_text) == ("Falls", "12 months", TEXT)

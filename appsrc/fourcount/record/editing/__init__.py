@@ -25,7 +25,7 @@ from fourcount.record.editing.choosing import (
     with_where,
 )
 from fourcount.record.editing.forms import in_form
-from fourcount.record.editing.pasting import take_paste
+from fourcount.record.editing.pasting import brings_another_table, take_paste
 from fourcount.record.editing.stratum_rows import add_stratum, remove_stratum, with_of_total
 from fourcount.record.editing.texts import (
     OUTCOME_TEXTS,
@@ -38,9 +38,9 @@ from fourcount.record.editing.texts import (
 )
 
 __all__ = [
-    "OUTCOME_TEXTS", "PATIENT_TEXTS", "RECORD_TEXTS", "STRATUM_TEXTS", "add_stratum", "clear_table",
-    "count_other_outcome", "edit_record_text", "edit_text", "in_form", "remove_stratum", "swap_groups", "take_paste",
-    "typed_texts", "with_adjusted_measure", "with_choices", "with_counting", "with_design", "with_effect",
-    "with_family", "with_follow_up_varied", "with_layout", "with_level", "with_of_total", "with_outcome",
-    "with_paper_measure", "with_welcome", "with_where",
+    "OUTCOME_TEXTS", "PATIENT_TEXTS", "RECORD_TEXTS", "STRATUM_TEXTS", "add_stratum", "brings_another_table",
+    "clear_table", "count_other_outcome", "edit_record_text", "edit_text", "in_form", "remove_stratum", "swap_groups",
+    "take_paste", "typed_texts", "with_adjusted_measure", "with_choices", "with_counting", "with_design",
+    "with_effect", "with_family", "with_follow_up_varied", "with_layout", "with_level", "with_of_total",
+    "with_outcome", "with_paper_measure", "with_welcome", "with_where",
 ]  # fmt: skip

@@ -27,11 +27,14 @@ if TYPE_CHECKING:
 def take_paste(outcome: Outcome, pasted: Pasted) -> Outcome:
     """The outcome with the pasted table in place of its own, and with the words and printed figures that were told.
 
-    Words that the paste does not tell stay, and so do all choices. A printed effect without counts joins the counts
-    that are there; where there are none, it is an outcome of its own.
+    Words that the paste does not tell stay, and so do all choices, unless it brings another table over one that was
+    there. A printed effect without counts joins the counts that are there; where there are none, it is an outcome of
+    its own.
     """
     if pasted.form == "effect-only" and typed_texts(outcome):
         return replace(outcome, **_figures(pasted, counts=True))
+    if brings_another_table(outcome, pasted):
+        outcome = Outcome(design=outcome.design, layout=outcome.layout, where=outcome.where)
     formed = in_form(outcome, pasted.form)
     table = _table(formed.table, pasted)
     words = {
@@ -46,6 +49,22 @@ def take_paste(outcome: Outcome, pasted: Pasted) -> Outcome:
     layout: dict[str, Any] = {"layout": pasted.layout} if pasted.source == "block" else {}
     figures = _figures(pasted, counts=pasted.form != "effect-only")
     return replace(formed, table=table, **told, **layout, **figures)
+
+
+def brings_another_table(outcome: Outcome, pasted: Pasted) -> bool:
+    """Whether counts of other groups, or of another event, come over counts that are there.
+
+    The words, the printed results and the choices of the table that was there then say nothing of the new one.
+    """
+    told = {
+        "first_label_text": pasted.groups[0].label if pasted.groups else "",
+        "second_label_text": pasted.groups[1].label if len(pasted.groups) > 1 else "",
+        "left_heading_text": pasted.left_heading,
+        "left_words_text": pasted.words,
+    }
+    return bool(typed_texts(outcome)) and any(
+        text and text.casefold().strip() != getattr(outcome, field).casefold().strip() for field, text in told.items()
+    )
 
 
 def _table(before: Table, pasted: Pasted) -> Table:
