@@ -8,6 +8,7 @@ import pytest
 
 from forms import CONFOUNDED, at_time, effect_only, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
+from fourcount.record.outcome import FORMS, Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording.p_value import NOT_THE_SIZE
 from fourcount.wording.sentence import headline, measure_sentence, p_sentence
@@ -19,6 +20,24 @@ BY_HAND = "It rests on the 60 pairs that differ: in 20 the event came only {inde
 def said(outcome, choices=None):
     choices = choices or Choices()
     return headline(outcome, appraise(outcome, choices), choices)
+
+
+ASKED = {
+    "events-and-others": "Type the four counts of the table.",
+    "events-of-total": "Type the four counts of the table.",
+    "percent-of-total": "Type the percentage and the total of both groups.",
+    "effect-only": "Type the printed effect with its limits, such as 0.54 (0.37 to 0.78).",
+    "pairs": "Type how many pairs differ, either way; those that agree give risks as well.",
+    "person-time": "Type the events and the person-time of both groups.",
+    "risk-at-time": "Type both groups’ risks at one time, with their limits.",
+    "strata": "Type the four counts of every stratum; a blank row is left out.",
+}
+
+
+@pytest.mark.parametrize("form", FORMS)
+def test_an_empty_form_asks_for_what_it_takes(form):
+    """One quiet instruction, in the words of its own grid; nothing asks for counts that nobody can type there."""
+    assert said(Outcome(table=FORMS[form]())) == ASKED[form]
 
 
 def meaning(key, outcome):

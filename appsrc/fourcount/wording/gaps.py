@@ -84,6 +84,11 @@ GAP_TEXTS = {
     "limits-not-printed": "A risk stands without its limits, so no interval of the difference or the ratio follows.",
     "not-counts": "This form has no four counts.",
     "not-typed": "Type the four counts of the table.",
+    "percents-not-typed": "Type the percentage and the total of both groups.",
+    "pairs-not-typed": "Type how many pairs differ, either way; those that agree give risks as well.",
+    "rates-not-typed": "Type the events and the person-time of both groups.",
+    "risks-not-typed": "Type both groups’ risks at one time, with their limits.",
+    "strata-not-typed": "Type the four counts of every stratum; a blank row is left out.",
     "unreadable": "A cell of the table cannot be used; the line under the table says why.",
     "follows": "This figure takes a moment and will follow.",
     "design-survey-nnt": "A cross-sectional survey sees who has the event at one time, not who comes to have it, "

@@ -118,7 +118,7 @@ def test_discordant_pairs_alone_give_the_odds_ratio():
 
 def test_pairs_that_are_not_whole_say_nothing():
     """A blank discordant cell is waited for; one that cannot be read is marked."""
-    assert Gap("not-typed") == found("12", "30", "", "49").given
+    assert Gap("pairs-not-typed") == found("12", "30", "", "49").given
     findings = found("12", "thirty", "9", "49")
     assert Gap("unreadable") == findings.given
     assert [(mark.field, mark.key) for mark in findings.marks] == [("first_right_text", "not-a-count")]

@@ -92,7 +92,7 @@ def test_what_cannot_be_read_is_marked():
     assert Gap("unreadable") == found(level="high").given
     assert [mark.key for mark in found("9%", "12 to 6", "17%", "13 to 21").marks] == ["limits-disordered"]
     assert [mark.key for mark in found("0.09", "", "17%", "").marks] == ["percent-or-fraction"]
-    assert Gap("not-typed") == found("9%", "6 to 12", "", "").given
+    assert Gap("risks-not-typed") == found("9%", "6 to 12", "", "").given
 
 
 def test_a_patient_takes_the_printed_risks_or_their_ratio():

@@ -63,6 +63,11 @@ GAP_KEYS = (
     "other-outcome-unknown",  # this printed effect says nothing of the other outcome
     "not-counts",  # this form has no four counts
     "not-typed",  # not all four counts are there yet
+    "percents-not-typed",  # nor all percentages with their totals
+    "pairs-not-typed",  # nor the pairs that differ
+    "rates-not-typed",  # nor events and person-time of both groups
+    "risks-not-typed",  # nor both groups' risks at one time
+    "strata-not-typed",  # nor the four counts of every stratum
     "unreadable",  # a cell holds text that gives no count
     "follows",  # the figure takes a moment and is computed apart
     "design-survey-nnt",  # a cross-sectional survey has no number needed to treat

@@ -34,8 +34,8 @@ Given = Counts | PairCounts | Rates | TimedRisks | PrintedFigure
 class OutcomeFindings(msgspec.Struct, frozen=True, kw_only=True):
     """All that one outcome says under the record's choices.
 
-    Every key of ``MEASURES`` is in ``measures``; what cannot be given is a ``Gap`` there. ``counts`` is a
-    Gap ("not-typed", "unreadable") while the table is not whole, and all measures then hold that Gap.
+    Every key of ``MEASURES`` is in ``measures``; what cannot be given is a ``Gap`` there. While the table is not whole,
+    ``counts`` is a Gap ("unreadable", "not-typed" or its form's own such key), and all measures then hold that Gap.
 
     ``form`` is the form of print. ``given`` is what it gives to compute with, a Gap while that is not whole; ``counts``
     is the same for the forms of four counts (and for strata), and for every other form the Gap "not-counts" once

@@ -23,7 +23,7 @@ from fourcount.appraisal.patient import carry
 from fourcount.appraisal.postponing import NOTHING, Pace, postponed
 from fourcount.appraisal.starting_risk import StartingRisk, marks_of, starting_risk, typed_risk
 from fourcount.appraisal.table import read
-from fourcount.record.outcome import Outcome, form_of
+from fourcount.record.outcome import Form, Outcome, form_of
 from fourcount.record.paper import Choices
 from fourcount.stats.estimates import risk
 
@@ -35,7 +35,9 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     losses = losses_of(outcome, reading.counts)
     marks = reading.marks + marks_of(typed) + clusters.marks + losses.marks + adjusted.marks
     if isinstance(reading.counts, Gap):
-        return nothing_yet(reading.counts, form=form, measures=MEASURES, totals=reading.totals, marks=marks)
+        return nothing_yet(
+            _lacking(reading.counts, form), form=form, measures=MEASURES, totals=reading.totals, marks=marks
+        )
     counts, support = reading.counts, support_of(outcome)
     later = postponed(counts, choices, pace.loaded) if pace.deferring else NOTHING
     table = Table(counts=counts, choices=choices, postponed=later, behind=clusters.behind(counts))
@@ -56,6 +58,11 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         randomised=losses.randomised,
     )
     return whole(case, measures(figures, support, welcome=outcome.welcome), reading.totals)
+
+
+def _lacking(gap: Gap, form: Form) -> Gap:
+    """Why there are no counts; where nothing but percentages and totals is to be typed, counts are not asked for."""
+    return Gap("percents-not-typed") if form == "percent-of-total" and gap.key == "not-typed" else gap
 
 
 def _at(

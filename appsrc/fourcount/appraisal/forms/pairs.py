@@ -73,7 +73,7 @@ def _lacking(reading: PairsReading) -> Gap | None:
     """Why the pairs say nothing yet: a cell that cannot be used, or discordant pairs that are not there."""
     if any(not mark.used for mark in reading.marks):
         return Gap("unreadable")
-    return Gap("not-typed") if reading.first_only is None or reading.second_only is None else None
+    return Gap("pairs-not-typed") if reading.first_only is None or reading.second_only is None else None
 
 
 def _oriented(reading: PairsReading, outcome: Outcome) -> tuple[PairCounts, dict[str, str]]:

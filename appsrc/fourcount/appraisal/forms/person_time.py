@@ -67,7 +67,7 @@ def _rates(reading: PersonTimeReading, outcome: Outcome) -> Rates | Gap:
     first_is_index = outcome.index_group == "first"
     index, reference = (reading.first, reading.second) if first_is_index else (reading.second, reading.first)
     if index.events is None or index.time is None or reference.events is None or reference.time is None:
-        return Gap("not-typed")
+        return Gap("rates-not-typed")
     return Rates(
         index_events=index.events,
         index_time=index.time,

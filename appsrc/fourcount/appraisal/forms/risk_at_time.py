@@ -67,7 +67,7 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
 def _lacking(reading: RiskAtTimeReading, index: PrintedRisk, reference: PrintedRisk) -> Gap | None:
     if any(not mark.used for mark in reading.marks):
         return Gap("unreadable")
-    return Gap("not-typed") if index.risk is None or reference.risk is None else None
+    return Gap("risks-not-typed") if index.risk is None or reference.risk is None else None
 
 
 def _patient(typed: Typed, figures: dict[str, Figure], outcome: Outcome) -> PatientFindings | Gap:
