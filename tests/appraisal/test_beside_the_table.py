@@ -270,7 +270,7 @@ def test_an_adjusted_effect_is_kept_beside_crude_counts(appraised):
     """Outside trials it is said that the figures are crude; what cannot be read is marked."""
     findings = appraised(*TABLE, design="cohort", adjusted_text="0.5 (0.3 to 0.8)", adjusted_for_text="age")
     told = {caution.key: caution.facts for caution in findings.cautions}
-    assert told["crude-beside-adjusted"] == {"measure": "odds_ratio", "value": 0.5, "adjusted_for": "age"}
+    assert told["crude-beside-adjusted"] == {"measure": "odds_ratio", "value": "0.5", "adjusted_for": "age"}
     assert "crude-beside-adjusted" not in {caution.key for caution in appraised(*TABLE, adjusted_text="0.5").cautions}
     unread = appraised(*TABLE, adjusted_text="strong")
     assert [(mark.field, mark.key) for mark in unread.marks] == [("adjusted_text", "paper-unreadable")]

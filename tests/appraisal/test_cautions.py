@@ -18,10 +18,10 @@ def test_the_keys_in_order():
         "abstract-only", "cannot-be-checked", "interval-rebuilt", "printed-level", "concordant-unknown",
         "hazard-ratio", "events-counted", "follow-up-varied", "randomised-differs", "losses-overturn",
         "cluster-without-icc", "cluster-corrected", "cluster-uncorrected", "strata-part", "strata-odds-ratio-parts",
-        "strata-unlike", "no-meta-analysis", "odds-ratio-differs", "effect-kept-constant", "effect-kept-elsewhere",
-        "baseline-far", "baseline-uncertain", "rests-on-baseline", "totals-are-sampled", "controls-over-time",
-        "observational", "adjusted-effect", "crude-beside-adjusted", "converted-limits", "adjusted-converted",
-        "zero-cells", "half-added", "through-no-effect", "family-parts", "rare-harm", "leans",
+        "strata-unlike", "strata-small", "no-meta-analysis", "odds-ratio-differs", "effect-kept-constant",
+        "effect-kept-elsewhere", "baseline-far", "baseline-uncertain", "rests-on-baseline", "totals-are-sampled",
+        "controls-over-time", "observational", "adjusted-effect", "crude-beside-adjusted", "converted-limits",
+        "adjusted-converted", "zero-cells", "half-added", "through-no-effect", "family-parts", "rare-harm", "leans",
     ]  # fmt: skip
 
 

@@ -135,6 +135,10 @@ def test_strata_are_nested_beside_the_crude_measures() -> None:
     assert nested["test"]["method"] == "cmh"
     assert nested["homogeneity"]["degrees"] == 1
     check_number(nested["homogeneity"]["p"], 0, 1)
+    assert tuple(nested["interactions"]) == POOLED_MEASURES
+    for apart in nested["interactions"].values():
+        check_number(apart["p"], 0, 1)
+        check_figure({key: value for key, value in apart.items() if key != "p"})
     assert [stratum["label"] for stratum in nested["strata"]] == ["under 65", "65 and over"]
     assert nested["strata"][0]["counts"]["index_events"] == 10
     assert set(found["methods"]) >= set(POOLED_MEASURES)

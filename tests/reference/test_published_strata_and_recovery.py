@@ -76,11 +76,11 @@ def _interaction(entry: dict[str, Any]) -> Figures:
     found = interaction.ratio_of_ratios(first, second, entry["level"])
     assert isinstance(found, interaction.Interaction), found
     return {
-        "log_ratio": math.log(found.ratio),
+        "log_ratio": math.log(found.estimate),
         "standard_error": found.standard_error,
         "z": found.z,
         "p": found.p,
-        "ratio": found.ratio,
+        "ratio": found.estimate,
         "lower": found.low,
         "upper": found.high,
     }

@@ -94,6 +94,36 @@ def cautions_of(outcome, choices=None):
             ("This pools the 2 strata of one study. It is no meta-analysis: several studies differ in more ways."),
         ),
         (
+            strata(),
+            "observational",
+            (
+                "A cohort study does not assign its groups: pooling deals with what the strata differ in and with "
+                "nothing else, and the crude figures not even with that. Other differences between the groups may "
+                "explain them."
+            ),
+        ),
+        (
+            strata(adjusted_text="0.61 (0.42 to 0.88)", adjusted_for_text="age"),
+            "crude-beside-adjusted",
+            (
+                "The figures of this table are crude, or pooled over its strata and no more; the paper’s own odds "
+                "ratio, adjusted for age, is 0.61."
+            ),
+        ),
+        (
+            of_total(design="cohort", adjusted_measure="risk_difference", adjusted_text="-7.9% (-12.6 to -3.3)"),
+            "crude-beside-adjusted",
+            "The figures of this table are crude; the paper’s own difference, adjusted, is −7.9%.",
+        ),
+        (
+            strata(rows=(("mild", 1, 10, 3, 10), ("severe", 40, 100, 60, 100))),
+            "strata-small",
+            (
+                "In 1 of 2 strata fewer than 5 people are expected in a cell: the test of one odds ratio for all "
+                "strata says little there, and may find differences that are not there."
+            ),
+        ),
+        (
             paired("matched"),
             "observational",
             (

@@ -123,8 +123,10 @@ def controls_over_time(case: Case) -> Facts | None:
 
 
 def observational(case: Case) -> Facts | None:
-    """The groups were not made alike by chance, and the figures are crude."""
-    return {"design": case.outcome.design} if case.outcome.design in OBSERVATIONAL and not _adjusted(case) else None
+    """The groups were not made alike by chance, and the figures are crude, or pooled over strata at the most."""
+    if case.outcome.design not in OBSERVATIONAL or _adjusted(case):
+        return None
+    return {"design": case.outcome.design, **_strata(case)}
 
 
 def converted_limits(case: Case) -> Facts | None:
@@ -220,6 +222,11 @@ def _printed_alike(one: float, study: float) -> bool:
     size = min(study, 1 - study)
     unit = 0.001 if size >= 0.01 else 10.0 ** (math.floor(math.log10(size)) - 1) if size > 0 else 0.0
     return abs(one - study) <= unit / 2 + 1e-12
+
+
+def _strata(case: Case) -> Facts:
+    """How many strata are pooled, where any are: then not all figures are crude."""
+    return {} if case.pooled is None else {"strata": len(case.pooled.strata)}
 
 
 def _survey(case: Case) -> Facts:

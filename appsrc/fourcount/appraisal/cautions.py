@@ -146,6 +146,12 @@ CAUTIONS: tuple[Rule, ...] = (
         source="Breslow and Day 1980; Tarone 1985; a p below 10%: common practice",
     ),
     Rule(
+        key="strata-small",
+        holds=form_rules.strata_small,
+        forms=("strata",),
+        source="Breslow and Day 1980 (for strata of many people); Cochran 1954 (a fifth below five), from memory",
+    ),
+    Rule(
         key="no-meta-analysis",
         holds=form_rules.no_meta_analysis,
         forms=("strata",),

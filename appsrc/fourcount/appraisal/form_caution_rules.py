@@ -6,12 +6,19 @@ from fourcount.appraisal.case import Case, value
 from fourcount.appraisal.extras.e_values import OBSERVATIONAL
 from fourcount.appraisal.extras.printed import USUAL_LEVEL
 from fourcount.appraisal.findings import Clusters, Fact, Figure, Gap, Losses, PrintedFigure, Recovered, TimedRisks
+from fourcount.stats.strata_sums import informative, smallest_expected
 
 Facts = dict[str, Fact]
 
 UNLIKE = 0.1
 """A p of homogeneity below this speaks of unlike strata: such tests find little, so papers often take 10% (common
 practice)."""
+
+
+FEW_EXPECTED = 5
+A_FIFTH = 0.2
+"""Chi-square tests are shaky where more than a fifth of the expected counts lie below five (Cochran 1954, Biometrics
+10:417, from memory); here a stratum counts as such by the least of its four."""
 
 
 def strata_part(case: Case) -> tuple[Facts, ...]:
@@ -40,6 +47,15 @@ def strata_unlike(case: Case) -> Facts | None:
     if found is None or isinstance(found, Gap) or found.p >= UNLIKE:
         return None
     return {"p": found.p}
+
+
+def strata_small(case: Case) -> Facts | None:
+    """In too many strata few people are expected with the event or without it: a test of likeness says little there."""
+    if case.pooled is None or isinstance(case.pooled.homogeneity, Gap):
+        return None
+    told = informative([stratum.counts for stratum in case.pooled.strata])
+    small = sum(smallest_expected(counts) < FEW_EXPECTED for counts in told)
+    return {"small": small, "strata": len(told)} if small > A_FIFTH * len(told) else None
 
 
 def no_meta_analysis(case: Case) -> Facts | None:
@@ -182,7 +198,10 @@ def crude_beside_adjusted(case: Case) -> Facts | None:
     if printed is None or printed.estimate is None or outcome.design not in OBSERVATIONAL:
         return None
     adjusted_for = " ".join(outcome.adjusted_for_text.split())
-    return {"measure": printed.measure, "value": printed.estimate.value, "adjusted_for": adjusted_for}
+    facts: Facts = {"measure": printed.measure, "value": printed.estimate.text, "adjusted_for": adjusted_for}
+    if printed.unit != "one":
+        facts["print_unit"] = printed.unit
+    return facts if case.pooled is None else {**facts, "strata": len(case.pooled.strata)}
 
 
 def concordant_unknown(case: Case) -> Facts | None:

@@ -4,9 +4,20 @@ from __future__ import annotations
 
 from collections.abc import Callable, Mapping, Sequence
 
-from fourcount.appraisal.findings import POOLED_MEASURES, Counts, Figure, Gap, Homogeneity, Interval, Probability
+from fourcount.appraisal.findings import (
+    POOLED_MEASURES,
+    Counts,
+    Figure,
+    Gap,
+    Homogeneity,
+    Interaction,
+    Interval,
+    Probability,
+)
 from fourcount.appraisal.gating import Support
+from fourcount.stats import estimates, interaction
 from fourcount.stats import strata as stats
+from fourcount.stats.interaction import Estimate
 from fourcount.stats.methods import homogeneity_test, method, test
 
 POOLED_METHODS = {
@@ -19,6 +30,18 @@ POOLED_METHODS = {
 TEST = "cmh"
 HOMOGENEITY = "breslow-day-tarone"
 A_TENTH = 0.1
+
+INTERACTION = "interaction"
+"""The key of its entry among the calculations."""
+
+SET_AGAINST_EACH_OTHER = 2  # more strata than this have no one ratio between them
+
+_AGAINST: dict[str, tuple[str, Callable[[Counts], float | Gap], Callable[..., interaction.Interaction | Gap]]] = {
+    "pooled_risk_difference": ("wald", estimates.risk_difference, interaction.difference_of_differences),
+    "pooled_risk_ratio": ("katz", estimates.risk_ratio, interaction.ratio_of_ratios),
+    "pooled_odds_ratio": ("woolf", estimates.odds_ratio, interaction.ratio_of_ratios),
+}
+"""The textbook interval of each stratum, in every family: it reaches equally far both ways and so tells an error."""
 
 _ESTIMATES: dict[str, Callable[[Sequence[Counts]], float | Gap]] = {
     "pooled_risk_difference": stats.pooled_risk_difference,
@@ -60,6 +83,37 @@ def homogeneity(strata: Sequence[Counts], *, without: object = None) -> Homogene
     if isinstance(found, Gap):
         return found
     return Homogeneity(method=HOMOGENEITY, chi_square=found.chi_square, degrees=found.degrees, p=found.p)
+
+
+def interactions(
+    strata: Sequence[Counts], level: float, support: Support, *, without: object = None
+) -> dict[str, Interaction | Gap]:
+    """The first of two strata against the second, measure by measure; nothing of one stratum, or of more than two."""
+    if len(strata) != SET_AGAINST_EACH_OTHER:
+        return {}
+    return {
+        key: without if isinstance(without, Gap) else _interaction(key, strata, level)
+        for key in POOLED_MEASURES
+        if key.removeprefix("pooled_") not in support.withheld
+    }
+
+
+def _interaction(key: str, strata: Sequence[Counts], level: float) -> Interaction | Gap:
+    name, estimate, against = _AGAINST[key]
+    compute = method(key.removeprefix("pooled_"), name).interval
+    effects: list[Estimate] = []
+    for counts in strata:
+        effect, interval = estimate(counts), compute(counts, level)
+        if isinstance(effect, Gap):
+            return effect
+        if isinstance(interval, Gap):
+            return interval
+        effects.append((effect, interval.low, interval.high))
+    found = against(effects[0], effects[1], level)
+    if isinstance(found, Gap):
+        return found
+    interval = Interval(low=found.low, high=found.high)
+    return Interaction(figure=Figure(estimate=found.estimate, interval=interval, method=INTERACTION), p=found.p)
 
 
 def parting(crude: Mapping[str, Figure], pooled: Mapping[str, Figure | Gap]) -> tuple[str, ...]:

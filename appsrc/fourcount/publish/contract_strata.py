@@ -2,8 +2,16 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Counts, Gap, Homogeneity, Probability, StrataFindings, StratumFindings
-from fourcount.publish.contract_figures import Json, measure_json, value_json, withheld_json
+from fourcount.appraisal.findings import (
+    Counts,
+    Gap,
+    Homogeneity,
+    Interaction,
+    Probability,
+    StrataFindings,
+    StratumFindings,
+)
+from fourcount.publish.contract_figures import Json, figure_json, measure_json, value_json, withheld_json
 
 
 def strata_json(strata: StrataFindings | Gap) -> Json:
@@ -15,6 +23,7 @@ def strata_json(strata: StrataFindings | Gap) -> Json:
         "test": _test(strata.test),
         "homogeneity": _homogeneity(strata.homogeneity),
         "parting": list(strata.parting),
+        "interactions": {key: _interaction(found) for key, found in strata.interactions.items()},
         "strata": [_stratum(stratum) for stratum in strata.strata],
     }
 
@@ -29,6 +38,12 @@ def _homogeneity(found: Homogeneity | Gap) -> Json:
     if isinstance(found, Gap):
         return withheld_json(found)
     return {"p": found.p, "chi_square": value_json(found.chi_square), "degrees": found.degrees, "method": found.method}
+
+
+def _interaction(found: Interaction | Gap) -> Json:
+    if isinstance(found, Gap):
+        return withheld_json(found)
+    return {**figure_json(found.figure), "p": value_json(found.p)}
 
 
 def _stratum(stratum: StratumFindings) -> Json:

@@ -1,4 +1,9 @@
-"""Whether two estimates with their intervals differ: the ratio of two ratios, the difference of two differences."""
+"""Whether two estimates with their intervals differ: the ratio of two ratios, the difference of two differences.
+
+The two come from different people (two groups of one study, two trials), and each standard error is that of its own
+interval, which reaches equally far to both sides, on the log scale for a ratio. Source: Altman and Bland 2003,
+BMJ 326:219.
+"""
 
 from __future__ import annotations
 
@@ -16,21 +21,12 @@ Estimate = tuple[float, float, float]
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Interaction:
-    """The first ratio over the second with its interval; ``standard_error`` and ``z`` are of its logarithm."""
+    """The first ratio over the second, or the first difference less the second, with its interval and two-sided p.
 
-    ratio: float
-    low: float
-    high: float
-    z: float
-    p: float
-    standard_error: float
+    ``standard_error`` and ``z`` are of the logarithm for ratios.
+    """
 
-
-@dataclass(frozen=True, kw_only=True, slots=True)
-class DifferenceInteraction:
-    """The first difference less the second with its interval."""
-
-    difference: float
+    estimate: float
     low: float
     high: float
     z: float
@@ -39,46 +35,44 @@ class DifferenceInteraction:
 
 
 def ratio_of_ratios(first: Estimate, second: Estimate, level_of_both: float) -> Interaction | Gap:
-    """The ratio of two independent ratios (two groups of people, two trials), its interval at the same level, and p.
-
-    Each standard error is that of its own printed interval on the log scale. Source: Altman and Bland 2003,
-    BMJ 326:219.
-    """
-    one = from_limits(*first, level_of_both, log_scale=True)
-    two = from_limits(*second, level_of_both, log_scale=True)
-    if isinstance(one, Gap):
-        return one
-    if isinstance(two, Gap):
-        return two
-    error = math.hypot(one.standard_error, two.standard_error)
-    log_ratio = math.log(first[0]) - math.log(second[0])
-    reach = quantile(level_of_both) * error
+    """The ratio of two independent ratios, its interval at the same level, and the p of no difference."""
+    apart = _apart(first, second, level_of_both, log_scale=True)
+    if isinstance(apart, Gap):
+        return apart
+    distance, error, reach = apart
     return Interaction(
-        ratio=first[0] / second[0],
-        low=exponential(log_ratio - reach),
-        high=exponential(log_ratio + reach),
-        z=log_ratio / error,
-        p=two_sided_p(log_ratio / error),
+        estimate=first[0] / second[0],
+        low=exponential(distance - reach),
+        high=exponential(distance + reach),
+        z=distance / error,
+        p=two_sided_p(distance / error),
         standard_error=error,
     )
 
 
-def difference_of_differences(first: Estimate, second: Estimate, level_of_both: float) -> DifferenceInteraction | Gap:
-    """The same of two independent differences, on their own scale. Source: Altman and Bland 2003, BMJ 326:219."""
-    one = from_limits(*first, level_of_both, log_scale=False)
-    two = from_limits(*second, level_of_both, log_scale=False)
+def difference_of_differences(first: Estimate, second: Estimate, level_of_both: float) -> Interaction | Gap:
+    """The same of two independent differences, on their own scale."""
+    apart = _apart(first, second, level_of_both, log_scale=False)
+    if isinstance(apart, Gap):
+        return apart
+    distance, error, reach = apart
+    return Interaction(
+        estimate=distance,
+        low=distance - reach,
+        high=distance + reach,
+        z=distance / error,
+        p=two_sided_p(distance / error),
+        standard_error=error,
+    )
+
+
+def _apart(first: Estimate, second: Estimate, level: float, *, log_scale: bool) -> tuple[float, float, float] | Gap:
+    """How far the two are apart, the standard error of that, and how far its interval reaches."""
+    one, two = (from_limits(*estimate, level, log_scale=log_scale) for estimate in (first, second))
     if isinstance(one, Gap):
         return one
     if isinstance(two, Gap):
         return two
     error = math.hypot(one.standard_error, two.standard_error)
-    difference = first[0] - second[0]
-    reach = quantile(level_of_both) * error
-    return DifferenceInteraction(
-        difference=difference,
-        low=difference - reach,
-        high=difference + reach,
-        z=difference / error,
-        p=two_sided_p(difference / error),
-        standard_error=error,
-    )
+    distance = math.log(first[0]) - math.log(second[0]) if log_scale else first[0] - second[0]
+    return distance, error, quantile(level) * error

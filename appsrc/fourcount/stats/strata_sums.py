@@ -17,6 +17,11 @@ def informative(strata: Sequence[Counts]) -> tuple[Counts, ...]:
     return tuple(t for t in with_both_groups(strata) if t.events and t.non_events and t.total > 1)
 
 
+def smallest_expected(t: Counts) -> float:
+    """The least of the four counts that are expected with no effect: the product of its margins over N."""
+    return min(t.index_total, t.reference_total) * min(t.events, t.non_events) / t.total
+
+
 def nothing_to_compare(compared: Sequence[Counts]) -> Gap:
     if compared and not any(t.events for t in compared):
         return Gap("no-events")

@@ -190,6 +190,13 @@ TEXTS = {
         "Strata unlike each other",
         "The strata’s odds ratios differ ({p}): one pooled figure hides that; look at each stratum.",
     ),
+    "strata-small": (
+        "Small strata",
+        (
+            "In {small} of {strata} strata fewer than 5 people are expected in a cell: the test of one odds ratio for "
+            "all strata says little there, and may find differences that are not there."
+        ),
+    ),
     "no-meta-analysis": (
         "Strata of one study",
         "This pools the {strata} strata of one study. It is no meta-analysis: several studies differ in more ways.",

@@ -34,6 +34,18 @@ MATCHED = (
     "The pairs are alike in what they were matched for; other differences between cases and controls may explain the "
     "odds ratio."
 )
+OVER_STRATA = {
+    "observational": (
+        "A {design} does not assign its groups: pooling deals with what the strata differ in and with nothing else, "
+        "and the crude figures not even with that. Other differences between the groups may explain them."
+    ),
+    "crude-beside-adjusted": (
+        "The figures of this table are crude, or pooled over its strata and no more; the paper’s own {measure}, "
+        "adjusted{adjusted_for}, is {value}."
+    ),
+}
+"""What is said instead where the table is one of several strata."""
+
 SCENARIOS = {
     "none": "if none of them had the event",
     "all": "if all of them had it",
@@ -42,6 +54,7 @@ SCENARIOS = {
     "ratio": "at the ratio that was typed",
 }
 ADJUSTED_FOR = {"adjusted-effect": ", here {what}", "crude-beside-adjusted": " for {what}"}
+PRINT_UNITS = {"percent": "%", "per-1000": " per 1,000"}
 UNNAMED = {"index": "Index group", "reference": "Reference group"}
 UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
 SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or infinity are shown as they are."
@@ -49,15 +62,23 @@ SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or i
 
 def caution_text(caution: Caution) -> str:
     """The caution as one plain sentence with its numbers in it."""
-    if caution.key == "zero-cells" and caution.facts.get("count", 1) != 1:
-        return told(SEVERAL_ZEROS, caution.facts)
-    if caution.key == "half-added" and caution.facts.get("measure") == "risk_ratio":
-        return told(HALF_ADDED_TO_A_RATIO, caution.facts)
-    if caution.key == "effect-kept-constant" and caution.facts.get("effect") != "odds_ratio":
-        return told(RATIO_KEPT_CONSTANT, caution.facts)
-    if caution.key == "observational" and caution.facts.get("design") == "matched":
+    return told(_template(caution), caution.facts, _said(caution))
+
+
+def _template(caution: Caution) -> str:
+    """The sentence of a caution, which for some keys depends on the facts."""
+    key, facts = caution.key, caution.facts
+    if key == "zero-cells" and facts.get("count", 1) != 1:
+        return SEVERAL_ZEROS
+    if key == "half-added" and facts.get("measure") == "risk_ratio":
+        return HALF_ADDED_TO_A_RATIO
+    if key == "effect-kept-constant" and facts.get("effect") != "odds_ratio":
+        return RATIO_KEPT_CONSTANT
+    if key == "observational" and facts.get("design") == "matched":
         return MATCHED
-    return told(TEXTS.get(caution.key, UNKNOWN)[1], caution.facts, _said(caution))
+    if "strata" in facts and key in OVER_STRATA:
+        return OVER_STRATA[key]
+    return TEXTS.get(key, UNKNOWN)[1]
 
 
 def caution_title(caution: Caution) -> str:
@@ -79,6 +100,9 @@ def _said(caution: Caution) -> dict[str, str]:
         said["adjusted_for"] = ADJUSTED_FOR[caution.key].format(what=what) if what else ""
     if caution.key == "randomised-differs" and not str(facts.get("label", "")).strip():
         said["label"] = UNNAMED[str(facts.get("group", ""))] if facts.get("group") in UNNAMED else "One group"
+    if caution.key == "crude-beside-adjusted":
+        digits = str(facts.get("value", "")).replace("-", numbers.MINUS)
+        said["value"] = f"{digits}{PRINT_UNITS.get(str(facts.get('print_unit')), '')}"
     for name in ("crude", "pooled"):
         if name in facts and facts.get("measure") == "risk_difference":
             said[name] = _per_100(facts[name])

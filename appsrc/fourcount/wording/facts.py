@@ -76,6 +76,7 @@ STAND_INS = {
     "crude": "one figure",
     "pooled": "another",
     "strata": "several",
+    "small": "some",
     "side": "one side",
     "label": "comparison",
 }

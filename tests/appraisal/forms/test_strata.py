@@ -2,10 +2,12 @@
 
 from __future__ import annotations
 
+import math
+
 import pytest
 
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.findings import MEASURES, Counts, Figure, Gap, Interval
+from fourcount.appraisal.findings import MEASURES, POOLED_MEASURES, Counts, Figure, Gap, Interval
 from fourcount.record.outcome import Outcome, Patient, Strata, Stratum
 from fourcount.record.paper import FAMILIES, Choices
 
@@ -118,6 +120,39 @@ def test_unlike_strata_are_said():
     assert "strata-unlike" not in facts(found(ALIKE))
 
 
+def test_strata_of_a_few_people_are_said():
+    """Where over a fifth of those that tell something expect under 5 in a cell; 10 v 10 with 10 events expect 5."""
+    even = (5, 5, 5, 5)
+    assert "strata-small" not in facts(found((even, even)))
+    assert facts(found((even, (4, 5, 5, 5))))["strata-small"] == [{"small": 1, "strata": 2}]
+    assert "strata-small" not in facts(found((*[even] * 4, (4, 5, 5, 5))))
+    nothing = (0, 3, 0, 3)
+    assert "strata-small" not in facts(found((even, even, nothing)))
+
+
+@pytest.mark.parametrize("family", FAMILIES)
+def test_two_strata_are_set_against_each_other(family):
+    """By the error of each textbook interval, whatever the family (Altman and Bland 2003); Woolf's by hand."""
+    found_apart = found(ALIKE, family).strata.interactions
+    odds = found_apart["pooled_odds_ratio"]
+    ratios = (10 * 80 / (90 * 20), 3 * 31 / (47 * 9))
+    error = sum(1 / count for row in ALIKE for count in row) ** 0.5
+    assert odds.figure.estimate == pytest.approx(ratios[0] / ratios[1])
+    assert odds.figure.interval.high == pytest.approx(ratios[0] / ratios[1] * math.exp(1.959963985 * error))
+    assert odds.p == pytest.approx(math.erfc(abs(math.log(ratios[0] / ratios[1])) / error / 2**0.5))
+    assert found_apart["pooled_risk_difference"].figure.estimate == pytest.approx(-0.1 - (3 / 50 - 9 / 40))
+
+
+def test_more_strata_or_fewer_have_no_one_interaction():
+    """Nor what the design or clusters withhold, nor what has no logarithm."""
+    assert found(ALIKE[:1]).strata.interactions == found((*ALIKE, ALIKE[0])).strata.interactions == {}
+    assert list(found(ALIKE, design="case-control").strata.interactions) == ["pooled_odds_ratio"]
+    zero = found((ALIKE[0], (0, 50, 9, 31))).strata.interactions
+    assert Gap("not-positive") == zero["pooled_risk_ratio"] == zero["pooled_odds_ratio"]
+    clustered = found(ALIKE, icc_text="0.05", cluster_size_text="20").strata.interactions
+    assert clustered == dict.fromkeys(POOLED_MEASURES, Gap("clusters-not-here"))
+
+
 def test_strata_are_no_studies():
     """Said of two strata and more; one has nothing to pool or to agree with."""
     assert facts(found(ALIKE))["no-meta-analysis"] == [{"strata": 2}]
@@ -157,11 +192,11 @@ def test_a_patient_takes_the_pooled_effect():
 
 def test_rows_that_are_not_whole_stop_the_figures():
     """A cell that cannot be read outweighs one that is empty; the mark names its row."""
-    assert Gap("not-typed") == found((ALIKE[0], ("3", "", "", ""))).given
+    assert Gap("strata-not-typed") == found((ALIKE[0], ("3", "", "", ""))).given
     findings = found((ALIKE[0], ("3", "", "", ""), ("x", "1", "2", "3")))
     assert Gap("unreadable") == findings.given == findings.strata
     assert [mark.field for mark in findings.marks] == ["strata.2.first_left_text"]
-    assert Gap("not-typed") == found(()).given == found((("", "", "", ""),)).given
+    assert Gap("strata-not-typed") == found(()).given == found((("", "", "", ""),)).given
 
 
 def test_empty_strata_are_reasons():

@@ -31,16 +31,17 @@ from fourcount.appraisal.findings.keys import (
 )
 from fourcount.appraisal.findings.outcome import Given, OutcomeFindings, Totals
 from fourcount.appraisal.findings.patient import Conversion, PatientFindings
-from fourcount.appraisal.findings.strata import Homogeneity, StrataFindings, StratumFindings
+from fourcount.appraisal.findings.strata import Homogeneity, Interaction, StrataFindings, StratumFindings
 from fourcount.record.entry.readings import Mark, PrintedFigure
 from fourcount.stats.number_needed import Kind, NumberNeeded, NumberNeededLimit
 from fourcount.stats.results import Counts, Fact, Gap, Interval, PairCounts, Rates, TimedRisks
 
 __all__ = [
-    "EFFECT_MEASURES", "GAP_KEYS", "MEASURES", "PAIR_MEASURES", "POOLED_MEASURES", "RATE_MEASURES", "TIMED_MEASURES",
-    "AnyNumberNeeded", "Caution", "CheckFindings", "Clusters", "Conversion", "Counts", "EValues", "Extras", "Fact",
-    "Figure", "FigureCheck", "Finding", "Fit", "Fragility", "Gap", "Given", "Homogeneity", "Interval", "Kind",
-    "LossScenario", "Losses", "Mark", "Match", "NumberNeeded", "NumberNeededLimit", "NumberNeededRange", "Orientation",
-    "OutcomeFindings", "PairCounts", "PatientFindings", "PrintedFigure", "Probability", "Range", "Rates", "Recovered",
-    "StrataFindings", "StratumFindings", "TimedRisks", "Totals",
+    "EFFECT_MEASURES", "GAP_KEYS", "MEASURES", "PAIR_MEASURES", "POOLED_MEASURES", "RATE_MEASURES",
+    "TIMED_MEASURES", "AnyNumberNeeded", "Caution", "CheckFindings", "Clusters", "Conversion", "Counts", "EValues",
+    "Extras", "Fact", "Figure", "FigureCheck", "Finding", "Fit", "Fragility", "Gap", "Given", "Homogeneity",
+    "Interaction", "Interval", "Kind", "LossScenario", "Losses", "Mark", "Match", "NumberNeeded",
+    "NumberNeededLimit", "NumberNeededRange", "Orientation", "OutcomeFindings", "PairCounts", "PatientFindings",
+    "PrintedFigure", "Probability", "Range", "Rates", "Recovered", "StrataFindings", "StratumFindings",
+    "TimedRisks", "Totals",
 ]  # fmt: skip

@@ -17,6 +17,16 @@ class Homogeneity(msgspec.Struct, frozen=True, kw_only=True):
     p: float
 
 
+class Interaction(msgspec.Struct, frozen=True, kw_only=True):
+    """How far two strata's effects are apart: the first ratio over the second, the first difference less the second.
+
+    ``p`` is two-sided, of no difference between the two.
+    """
+
+    figure: Figure
+    p: float
+
+
 class StratumFindings(msgspec.Struct, frozen=True, kw_only=True):
     """One stratum: its label (or its number), its counts, and the crude measures in it."""
 
@@ -30,7 +40,8 @@ class StrataFindings(msgspec.Struct, frozen=True, kw_only=True):
 
     ``pooled`` has the keys of ``POOLED_MEASURES``; the crude measures stand in ``OutcomeFindings.measures``.
     ``test`` is Cochran-Mantel-Haenszel's. ``parting`` lists the measures whose crude value differs from the pooled one
-    by more than a tenth or points the other way.
+    by more than a tenth or points the other way. ``interactions`` has, for exactly two strata, the measures of
+    ``POOLED_MEASURES`` that the design gives, each the one stratum's effect against the other's.
     """
 
     strata: tuple[StratumFindings, ...]
@@ -38,3 +49,4 @@ class StrataFindings(msgspec.Struct, frozen=True, kw_only=True):
     test: Probability | Gap
     homogeneity: Homogeneity | Gap
     parting: tuple[str, ...] = ()
+    interactions: dict[str, Interaction | Gap] = {}

@@ -26,7 +26,7 @@ from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import Support, support_of
 from fourcount.appraisal.measures import Table, all_figures, measures, own_test
 from fourcount.appraisal.patient import carry_effect
-from fourcount.appraisal.pooling import cmh, homogeneity, parting, pooled_figures
+from fourcount.appraisal.pooling import cmh, homogeneity, interactions, parting, pooled_figures
 from fourcount.appraisal.postponing import NOTHING, Pace, postponed
 from fourcount.appraisal.starting_risk import StartingRisk, Typed, marks_of, typed_risk
 from fourcount.appraisal.table import oriented, totals_of
@@ -91,7 +91,7 @@ def _all_counts(readings: list[StratumReading], outcome: Outcome) -> tuple[Count
     ]
     gaps = [one for one in found if isinstance(one, Gap)]
     if gaps or not found:
-        return Gap("unreadable") if Gap("unreadable") in gaps else Gap("not-typed")
+        return Gap("unreadable") if Gap("unreadable") in gaps else Gap("strata-not-typed")
     return tuple(one for one in found if isinstance(one, Counts))
 
 
@@ -134,6 +134,7 @@ def _strata(
         test=cmh(strata, without=table.behind),
         homogeneity=homogeneity(strata, without=table.behind),
         parting=parting(crude, pooled),
+        interactions=interactions(strata, table.choices.level, support, without=table.behind),
     )
 
 

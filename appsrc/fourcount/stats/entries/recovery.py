@@ -39,6 +39,9 @@ RECOVERIES = (
             "of its own interval on the log scale. Differences: the same without logarithms"
         ),
         source="Altman and Bland 2003, BMJ 326:219",
-        note="The two effects come from different people. Finds little where the intervals are wide.",
+        note=(
+            "The two effects come from different people. Finds little where the intervals are wide. Of counts, each "
+            "interval is the textbook one (Wald, Katz, Woolf), whichever family is chosen."
+        ),
     ),
 )

@@ -7,17 +7,14 @@ from fourcount.appraisal.findings import (
     Figure,
     Gap,
     Homogeneity,
-    Interval,
     OutcomeFindings,
     StrataFindings,
-    StratumFindings,
 )
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.stats.interaction import Interaction, ratio_of_ratios
 from fourcount.stats.methods import HOMOGENEITY_TESTS, STRATA_TESTS, homogeneity_test, test
 from fourcount.stats.results import HomogeneityTest
-from fourcount.wording import limits, numbers
+from fourcount.wording import limits, lines, numbers
 from fourcount.wording.form import crude, measure_of
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.numbers import plain
@@ -36,7 +33,7 @@ from fourcount.wording.working.parts import (
 from fourcount.wording.working.unpaired import unpaired_rows
 
 RATIO_OF_RATIOS = "Ratio of the two strata’s ratios"
-TWO = 2
+DIFFERENCE_OF_DIFFERENCES = "Between the two strata’s differences, per 100"
 
 
 def strata_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
@@ -51,7 +48,7 @@ def strata_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choic
     rows = [*parts, (ESTIMATE, _sums(measure, counts))]
     unit = "per 100" if measure == "pooled_risk_difference" else ""
     rows += interval_rows(measure, found, choices.level, "strata", unit=unit)
-    rows += _interaction(measure, strata.strata, choices)
+    rows += _interaction(measure, strata)
     return (*rows, *other_methods(measure, found, table_measure(measure), (counts,), choices.level))
 
 
@@ -95,28 +92,17 @@ def _sums(measure: str, counts: list[Counts]) -> str:
     return f"{plain(above)}/{plain(below)} = {value(above, below)}"
 
 
-def _interaction(measure: str, strata: tuple[StratumFindings, ...], choices: Choices) -> list[Row]:
-    """Of exactly two strata, how far their ratios are apart."""
-    key = measure.removeprefix("pooled_")
-    figures = [stratum.measures.get(key) for stratum in strata]
-    if len(figures) != TWO or measure == "pooled_risk_difference":
+def _interaction(measure: str, strata: StrataFindings) -> list[Row]:
+    """Of exactly two strata, how far their effects are apart."""
+    found = strata.interactions.get(measure)
+    if found is None:
         return []
-    given = [_three(figure) for figure in figures if isinstance(figure, Figure)]
-    if len(given) != TWO or given[0] is None or given[1] is None:
-        return []
-    found = ratio_of_ratios(given[0], given[1], choices.level)
-    if not isinstance(found, Interaction):
-        return [SPACE, (RATIO_OF_RATIOS, gap_text(found))]
-    interval = limits.ratio_interval(Interval(low=found.low, high=found.high), found.ratio)
-    words = f"{numbers.ratio(found.ratio)}{limits.bracketed(interval)}, {numbers.p_phrase(found.p)}"
-    return [SPACE, (RATIO_OF_RATIOS, words), *about(CALCULATIONS["interaction"])]
-
-
-def _three(figure: Figure) -> tuple[float, float, float] | None:
-    interval, estimate = figure.interval, figure.estimate
-    if isinstance(estimate, Gap) or not isinstance(interval, Interval):
-        return None
-    return estimate, interval.low, interval.high
+    label = DIFFERENCE_OF_DIFFERENCES if measure == "pooled_risk_difference" else RATIO_OF_RATIOS
+    if isinstance(found, Gap):
+        return [SPACE, (label, gap_text(found))]
+    interval = limits.bracketed(lines.interval_text(measure, found.figure))
+    words = f"{lines.estimate_text(measure, found.figure)}{interval}, {numbers.p_phrase(found.p)}"
+    return [SPACE, (label, words), *about(CALCULATIONS["interaction"])]
 
 
 def _homogeneity(found: HomogeneityTest | Gap) -> str:
