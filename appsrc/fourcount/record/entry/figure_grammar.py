@@ -297,7 +297,8 @@ class Grammar:
             return after
         if found and found[-1].p is not None and not self.unnamed:
             return after
-        if not found or found[-1].p is not None:
+        apart = found and any(token.kind == "number" for token in self.tokens[found[-1].after : place])
+        if not found or found[-1].p is not None or (apart and not self.unnamed):
             found.append(Figure(place, None))
         figure = found[-1]
         figure.p, figure.p_relation, figure.after = p.number, p.relation, after

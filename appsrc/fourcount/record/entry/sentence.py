@@ -180,7 +180,8 @@ class SentenceReader:
             first, second = first_full, second_full
         labels = Labels(self.printed).of(first, second, start, end)
         if not self._compared(first, second, labels, (start, end)):
-            if not (first.complete and second.complete and first.percent and second.percent):
+            proven = first.complete and second.complete and first.percent and second.percent
+            if not (proven or self._of_people(first, second)):
                 return None
             if (first.total and first.total.whole) == (second.total and second.total.whole):
                 return None
@@ -188,6 +189,12 @@ class SentenceReader:
         nested = first.events is not None and second.total is not None and first.events.whole == second.total.whole
         doubts += ["not-compared"] if nested and "not-compared" not in doubts else []
         return self._pasted((first, second), labels, (start, end), doubts, quantities)
+
+    def _of_people(self, first: Quantity, second: Quantity) -> bool:
+        """Whether "1 of 96 and 14 of 98 children" stands there: two counts of people side by side."""
+        between = [token.lower for token in self.tokens[first.after : second.first]]
+        noun = self.tokens[second.after].lower if second.after < len(self.tokens) else ""
+        return between == ["and"] and noun in PEOPLE and first.total is not None and second.total is not None
 
     def _counts_without_totals(
         self, first: Quantity, second: Quantity, taken: frozenset[int], start: int, end: int
@@ -214,7 +221,7 @@ class SentenceReader:
         around = {token.lower for token in self.tokens[bounds[0] : bounds[1]]}
         effect = any(figure.measure in _EFFECTS for figure in self.figures)
         if _of_own_totals(first) and _of_own_totals(second):
-            return all(labels)
+            return all(labels) or "respectively" in around
         if COMPARATORS & between or _GROUP_WORDS & around or effect or (self.figures and all(labels)):
             return True
         if strictly or not all(labels):

@@ -116,6 +116,9 @@ class Labels:
             pair = self.ahead(one - 2, second.after), self.ahead(two - 2, one)
         else:
             pair = self.behind(one + 1, two), self.behind(two + 1, first.first if two < first.first else end)
+            nouns = [token for place in (one, two) for token in self.tokens[place + 1 : place + 2]]
+            if not any(pair) and len({noun.lower for noun in nouns} & PEOPLE) == 2:
+                return nouns[0].text.rstrip("."), nouns[1].text.rstrip(".")
         return pair if all(pair) else None
 
     def _told_apart(self, first: str, second: str) -> tuple[str, str]:

@@ -18,12 +18,15 @@ from fourcount.record.entry.pasted.vocabulary import (
     time_of_people,
 )
 from fourcount.record.entry.tokens import Token
+from fourcount.record.entry.word_list import words
 
 OPENING = ("(", "[", "{")
 CLOSING = (")", "]", "}")
 _NOTHING = Token("mark", "", 0, 0)
 _LINKS = frozenset(("of", "in", "among", "per", "on", "for", "from", "out", "during", "over", "by", "at", "under"))
 _ROUND_BASES = (1, 10, 100, 1000, 10_000, 100_000, 1_000_000)
+_NUMBERED = frozenset(words("week day month year visit cycle grade stage phase step part room question level session"))
+_BEFORE_NUMBERED = frozenset(words("in at on by until from to of and or after before during through"))
 _LARGEST = 10**9
 
 
@@ -80,6 +83,8 @@ class Phrases:
     def _countable(self, place: int) -> bool:
         """Whether a number can be one of people: free, without a currency, a slash or a hyphen around it."""
         token, before, following = self.at(place), self.at(place - 1), self.at(place + 1)
+        if self._is_numbered(place) or (before.lower == "per" and token.whole in _ROUND_BASES):
+            return False
         if place in self.busy or before.text in ("$", "£", "€", "¥", "#", "±", "<", ">", "*", "^"):
             return False
         if before.text in ("/", "-") and before.end == token.start and self.at(place - 2).end == before.start:
@@ -88,6 +93,11 @@ class Phrases:
             return False
         joined = following.text == "-" and following.start == token.end and self.at(place + 2).start == following.end
         return not (joined and not token.percent)
+
+    def _is_numbered(self, place: int) -> bool:
+        """Whether a number is a name, as in "in week 3 of 12", and not "at one year 38 of 412"."""
+        named = self.at(place - 1).lower in _NUMBERED
+        return named and (self.at(place - 2).kind == "mark" or self.at(place - 2).lower in _BEFORE_NUMBERED)
 
     def _is_clock(self, place: int) -> bool:
         """Whether a number is part of a time or a ratio such as 9:30."""

@@ -59,7 +59,7 @@ NOT_PEOPLE = frozenset(
     words(
         "score scores scored scoring scale scales page pages chapter chapters table tables figure figures mmhg "
         "volume issue acuity version grade visual vision systolic diastolic dollars euros pounds season seasons "
-        "rating ratings rated lesson lessons marks appendix supplement verse vas apgar lanes titre titer titers "
+        "rating ratings rated lesson lessons mark marks appendix supplement verse vas apgar lanes titre titer titers "
         "titres dilution percentile domains criteria reviewers"
     )
 )
