@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import json
+import math
 from typing import Any
 
 import pytest
@@ -14,7 +15,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import PAIR_MEASURES, POOLED_MEASURES, RATE_MEASURES, TIMED_MEASURES
 from fourcount.publish.answer import answer
 from fourcount.publish.contract import PUBLISHED, contract
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import Design, Outcome
 from fourcount.record.paper import FAMILIES, Choices, Family
 
 EVERYWHERE = ["format", "design", "level", "intervals", "form", "measures", "methods", "adjusted_methods"]
@@ -172,3 +173,18 @@ def test_a_form_that_is_not_whole_is_withheld(outcome: Outcome) -> None:
     found = published(outcome)
     for part in (*found["measures"].values(), found["methods"], found["tests"], found["conversion"]):
         assert withheld(part)
+
+
+@pytest.mark.parametrize("design", ["matched", "paired"])
+def test_pairs_that_differ_alone_have_all_methods_and_tests(design: Design) -> None:
+    """12 against 5 by hand: McNemar's chi-square (7²/17) has p 0.0896; the odds ratio's log limits 2.4 exp(±1.96 s)."""
+    found = published(paired(design, ("", 12, 5, "")))
+    low, high = found["methods"]["pair_odds_ratio"]["log"]
+    spread = math.exp(1.959964 * math.sqrt(1 / 12 + 1 / 5))
+    assert (low, high) == (pytest.approx(2.4 / spread), pytest.approx(2.4 * spread))
+    assert found["tests"]["mcnemar"] == pytest.approx(math.erfc(math.sqrt(49 / 17 / 2)))
+    assert set(found["tests"]) == {"mcnemar", "mcnemar-corrected", "mcnemar-exact", "mcnemar-mid-p"}
+    reason = "design-matched" if design == "matched" else "concordant-pairs-unknown"
+    assert found["methods"]["pair_difference"]["tango"]["withheld"] == reason
+    swapped = published(paired(design, ("", 12, 5, ""), index_group="second"))
+    assert swapped["methods"]["pair_odds_ratio"]["log"][0] == pytest.approx(1 / high)

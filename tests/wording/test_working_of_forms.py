@@ -167,3 +167,9 @@ def test_a_line_that_is_not_there_has_an_empty_working():
     findings = appraise(paired(), Choices())
     for key in ("stratum.7", "e_value"):
         assert working(key, paired(), findings, Choices()).rows == ()
+
+
+def test_the_pairs_that_differ_are_enough_for_every_test_of_pairs():
+    """The p stands in the working whether or not the pairs that agree were typed."""
+    alone, whole = paired("paired", ("", 20, 40, "")), paired("paired", (30, 20, 40, 110))
+    assert rows_of("test", alone)["McNemar mid-P"] == rows_of("test", whole)["McNemar mid-P"]

@@ -6,6 +6,7 @@ from collections.abc import Mapping
 from typing import Any
 
 from fourcount.appraisal.clusters import clusters_of
+from fourcount.appraisal.discordant import pairs_as_typed
 from fourcount.appraisal.findings import (
     Counts,
     Gap,
@@ -60,9 +61,10 @@ def every_interval(outcome: Outcome, findings: OutcomeFindings, level: float) ->
         withheld = support_of(outcome).withheld
         crude = _every(METHODS, _of_counts(given if isinstance(behind, Gap) else behind), withheld, level, behind)
         return {**crude, **_pooled(findings, withheld, level, without)}
-    if isinstance(given, PairCounts):
-        methods = (*_RISKS, *PAIR_METHODS)
-        return _every(methods, _of_pairs(given), withheld_of_pairs(outcome), level, clusters.elsewhere)
+    pairs = pairs_as_typed(outcome, findings)
+    if pairs is not None:
+        withheld = {**_lacking_pairs(findings), **withheld_of_pairs(outcome)}
+        return _every((*_RISKS, *PAIR_METHODS), _of_pairs(pairs), withheld, level, clusters.elsewhere)
     if isinstance(given, Rates):
         return _every(RATE_METHODS, _of_rates(given), withheld_of_rates(outcome.design), level, clusters.elsewhere)
     if isinstance(given, TimedRisks):
@@ -81,8 +83,9 @@ def every_p(outcome: Outcome, findings: OutcomeFindings) -> dict[str, float | Ga
     if isinstance(given, Counts):
         behind = clusters.behind(given) or given
         return _every_test(TESTS, given if isinstance(behind, Gap) else behind, behind)
-    if isinstance(given, PairCounts):
-        return _every_test(PAIR_TESTS, given, clusters.elsewhere)
+    pairs = pairs_as_typed(outcome, findings)
+    if pairs is not None:
+        return _every_test(PAIR_TESTS, pairs, clusters.elsewhere)
     return _every_test(RATE_TESTS, given, clusters.elsewhere) if isinstance(given, Rates) else {}
 
 
@@ -133,6 +136,12 @@ def _every_test(tests: tuple[Test, ...], counts: Any, without: object) -> dict[s
         p = without if isinstance(without, Gap) else test.p(counts)
         found[test.key] = Gap("cluster-no-exact") if isinstance(p, Gap) and p.key == "not-whole" else p
     return found
+
+
+def _lacking_pairs(findings: OutcomeFindings) -> Withheld:
+    """The measures that need pairs which were not typed."""
+    found = {key: measure.key for key, measure in findings.measures.items() if isinstance(measure, Gap)}
+    return {key: reason for key, reason in found.items() if reason == "concordant-pairs-unknown"}
 
 
 def _pooled(findings: OutcomeFindings, withheld: Withheld, level: float, without: Gap | None) -> dict[str, Intervals]:

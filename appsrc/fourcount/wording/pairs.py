@@ -1,23 +1,7 @@
-"""The pairs that differ, also where those that agree were never typed."""
+"""The two sides of pairs as sentences name them: as the reader does, or as the design does."""
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import OutcomeFindings, PairCounts
-from fourcount.record.outcome import Outcome
-from fourcount.wording.form import given
+from fourcount.appraisal.discordant import pairs_that_differ
 
-
-def pairs_that_differ(outcome: Outcome, findings: OutcomeFindings) -> tuple[int, int] | None:
-    """Pairs with the event on the index side only, and on the reference side only; None where neither is known.
-
-    Without all pairs the findings give none, but the table's margins hold those typed, in the print's order. They
-    change places with the groups, and with the outcome that is counted.
-    """
-    pairs, totals = given(findings), findings.totals
-    if isinstance(pairs, PairCounts):
-        return pairs.index_only, pairs.reference_only
-    if totals.first_right is None or totals.second_left is None:
-        return None
-    turned = (outcome.index_group == "second") != (outcome.counted == "right")
-    first, second = totals.first_right, totals.second_left
-    return (second, first) if turned else (first, second)
+__all__ = ["pairs_that_differ"]

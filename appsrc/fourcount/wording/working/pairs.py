@@ -56,10 +56,11 @@ def _of_those_that_differ(
 
 
 def pair_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
-    """The p of McNemar's tests, and the family's own in full."""
-    pairs = given(findings)
-    if not isinstance(pairs, PairCounts):
+    """The p of McNemar's tests, and the family's own in full; the pairs that differ are enough for them."""
+    first, second = findings.totals.first_right, findings.totals.second_left
+    if first is None or second is None:
         return ()
+    pairs = PairCounts(both=0, index_only=first, reference_only=second, neither=0)
     own = [] if isinstance(findings.test, Gap) else about(test(findings.test.method))
     return (*p_rows(PAIR_TESTS, (pairs,), findings.test), *own)
 
