@@ -8,6 +8,7 @@ from fourcount.appraisal.findings import (
     Conversion,
     Counts,
     Extras,
+    Fact,
     Figure,
     Gap,
     Given,
@@ -22,6 +23,10 @@ from fourcount.appraisal.losses import Randomised
 from fourcount.appraisal.measures import Figures
 from fourcount.record.outcome import Form, Outcome
 from fourcount.record.paper import Choices
+
+
+Facts = dict[str, Fact]
+"""What a rule answers with: the facts for its sentence."""
 
 
 def no_effect_of(measure: str) -> float:

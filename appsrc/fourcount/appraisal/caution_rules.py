@@ -7,12 +7,11 @@ import re
 from collections.abc import Mapping
 from types import MappingProxyType
 
-from fourcount.appraisal.case import Case, excludes, no_effect_of, straddles, value
+from fourcount.appraisal.case import Case, Facts, excludes, no_effect_of, straddles, value
 from fourcount.appraisal.extras.e_values import OBSERVATIONAL
-from fourcount.appraisal.findings import Fact, Gap, Interval, PrintedFigure
+from fourcount.appraisal.extras.printed import is_adjusted
+from fourcount.appraisal.findings import Gap, Interval, PrintedFigure
 from fourcount.record.outcome import COUNTED_FORMS, Form
-
-Facts = dict[str, Fact]
 
 HEADLINES = (
     "pooled_risk_difference",
@@ -211,10 +210,7 @@ def leans(case: Case) -> Facts | None:
 
 def _adjusted(case: Case) -> bool:
     """Whether the table is an effect that was adjusted for something."""
-    printed = case.given
-    if not isinstance(printed, PrintedFigure):
-        return False
-    return printed.adjusted or bool(case.outcome.adjusted_for_text.strip())
+    return isinstance(case.given, PrintedFigure) and is_adjusted(case.given, case.outcome)
 
 
 def _printed_alike(one: float, study: float) -> bool:

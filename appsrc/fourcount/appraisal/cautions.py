@@ -8,7 +8,7 @@ from functools import partial
 
 from fourcount.appraisal import caution_rules as rules
 from fourcount.appraisal import form_caution_rules as form_rules
-from fourcount.appraisal.case import Case
+from fourcount.appraisal.case import Case, Facts
 from fourcount.appraisal.findings import Caution
 from fourcount.record.outcome import COUNTED_FORMS, FORMS, Form
 
@@ -24,7 +24,7 @@ class Rule:
     """
 
     key: str
-    holds: Callable[[Case], rules.Facts | tuple[rules.Facts, ...] | None]
+    holds: Callable[[Case], Facts | tuple[Facts, ...] | None]
     source: str
     forms: tuple[Form, ...] = tuple(FORMS)
     about_cells: bool = False

@@ -2,13 +2,11 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.case import Case, value
+from fourcount.appraisal.case import Case, Facts, value
 from fourcount.appraisal.extras.e_values import OBSERVATIONAL
-from fourcount.appraisal.extras.printed import USUAL_LEVEL
-from fourcount.appraisal.findings import Clusters, Fact, Figure, Gap, Losses, PrintedFigure, Recovered, TimedRisks
+from fourcount.appraisal.extras.printed import is_adjusted, level_of
+from fourcount.appraisal.findings import Clusters, Figure, Gap, Losses, PrintedFigure, Recovered, TimedRisks
 from fourcount.stats.strata_sums import informative, smallest_expected
-
-Facts = dict[str, Fact]
 
 UNLIKE = 0.1
 """A p of homogeneity below this speaks of unlike strata: such tests find little, so papers often take 10% (common
@@ -158,7 +156,7 @@ def printed_level(case: Case) -> Facts | None:
     if isinstance(given, TimedRisks):
         level = given.level
     elif isinstance(given, PrintedFigure) and isinstance(case.extras.recovered, Recovered):
-        level = given.level or USUAL_LEVEL
+        level = level_of(given)
     else:
         return None
     return None if abs(level - case.choices.level) < 1e-9 else {"level": level, "chosen": case.choices.level}
@@ -169,8 +167,9 @@ def adjusted_effect(case: Case) -> Facts | None:
     printed, outcome = case.given, case.outcome
     if not isinstance(printed, PrintedFigure) or outcome.design not in OBSERVATIONAL:
         return None
-    adjusted_for = " ".join(outcome.adjusted_for_text.split())
-    return {"design": outcome.design, "adjusted_for": adjusted_for} if printed.adjusted or adjusted_for else None
+    if not is_adjusted(printed, outcome):
+        return None
+    return {"design": outcome.design, "adjusted_for": _adjusted_for(case)}
 
 
 def kept_elsewhere(case: Case) -> Facts | None:
@@ -187,18 +186,15 @@ def adjusted_converted(case: Case) -> Facts | None:
     carried, printed = case.carried, case.given
     if carried is None or carried.effect != "odds_ratio" or not isinstance(printed, PrintedFigure):
         return None
-    if not printed.adjusted and not case.outcome.adjusted_for_text.strip():
-        return None
-    return {"baseline": carried.baseline}
+    return {"baseline": carried.baseline} if is_adjusted(printed, case.outcome) else None
 
 
 def crude_beside_adjusted(case: Case) -> Facts | None:
     """Outside trials the paper prints an adjusted effect, and the figures here are crude."""
-    printed, outcome = case.extras.adjusted, case.outcome
-    if printed is None or printed.estimate is None or outcome.design not in OBSERVATIONAL:
+    printed = case.extras.adjusted
+    if printed is None or printed.estimate is None or case.outcome.design not in OBSERVATIONAL:
         return None
-    adjusted_for = " ".join(outcome.adjusted_for_text.split())
-    facts: Facts = {"measure": printed.measure, "value": printed.estimate.text, "adjusted_for": adjusted_for}
+    facts: Facts = {"measure": printed.measure, "value": printed.estimate.text, "adjusted_for": _adjusted_for(case)}
     if printed.unit != "one":
         facts["print_unit"] = printed.unit
     return facts if case.pooled is None else {**facts, "strata": len(case.pooled.strata)}
@@ -207,3 +203,7 @@ def crude_beside_adjusted(case: Case) -> Facts | None:
 def concordant_unknown(case: Case) -> Facts | None:
     """Only the discordant pairs are typed, so that nothing but the odds ratio follows."""
     return {} if isinstance(case.given, Gap) and isinstance(case.figures.get("pair_odds_ratio"), Figure) else None
+
+
+def _adjusted_for(case: Case) -> str:
+    return " ".join(case.outcome.adjusted_for_text.split())

@@ -13,6 +13,7 @@ Family = Literal["score", "textbook", "exact"]
 FAMILIES: tuple[Family, ...] = ("score", "textbook", "exact")
 LOWEST_LEVEL = 0.80
 HIGHEST_LEVEL = 0.999
+USUAL_LEVEL = 0.95  # of printed limits that say none: common practice
 
 
 class Choices(msgspec.Struct, frozen=True, kw_only=True):

@@ -14,10 +14,7 @@ from fourcount.appraisal.findings import (
     TimedRisks,
 )
 from fourcount.record.outcome import COUNTED_FORMS
-from fourcount.record.paper import Choices
-
-PRINTED_LEVEL = 0.95
-"""The level of a printed interval that says none (common practice)."""
+from fourcount.record.paper import USUAL_LEVEL, Choices
 
 NO_COUNTS = "not-counts"
 
@@ -45,7 +42,7 @@ def level_of(findings: OutcomeFindings, choices: Choices) -> float:
     """The level of the intervals that are shown: the record's, or that of the print where only the print has any."""
     found = findings.given
     if isinstance(found, PrintedFigure):
-        return found.level or PRINTED_LEVEL
+        return found.level or USUAL_LEVEL
     return found.level if isinstance(found, TimedRisks) else choices.level
 
 

@@ -12,7 +12,6 @@ COMMON = 0.15
 """An outcome that more people than this have is common here (VanderWeele and Ding 2017, Ann Intern Med 167:268)."""
 
 _CONVERSIONS = {"odds_ratio": ratio_of_common_odds, "hazard_ratio": ratio_of_common_hazards}
-E_VALUE_MEASURES = ("risk_ratio", "rate_ratio", "odds_ratio", "hazard_ratio")
 
 
 def e_values(ratio: Figure | Gap, measure: str, *, common: bool, adjusted: bool = False) -> EValues | Gap:

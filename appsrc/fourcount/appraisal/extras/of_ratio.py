@@ -3,8 +3,8 @@
 from __future__ import annotations
 
 from fourcount.appraisal.extras.attributable import of_exposed, prevented
-from fourcount.appraisal.extras.e_values import COMMON, E_VALUE_MEASURES, OBSERVATIONAL, e_values
-from fourcount.appraisal.extras.printed import ReadEffect, as_figure
+from fourcount.appraisal.extras.e_values import COMMON, OBSERVATIONAL, e_values
+from fourcount.appraisal.extras.printed import RATIOS, ReadEffect, as_figure
 from fourcount.appraisal.findings import Clusters, Counts, EValues, Extras, Figure, Gap
 from fourcount.appraisal.starting_risk import typed_risk
 from fourcount.record.entry.readings import Proportion
@@ -41,7 +41,7 @@ def e_value_of(
     if ratio is None or outcome.design not in OBSERVATIONAL:
         return None
     printed, common = adjusted.figure, outcome_is_common(outcome, counts)
-    if printed is not None and printed.measure in E_VALUE_MEASURES:
+    if printed is not None and printed.measure in RATIOS:
         return e_values(as_figure(printed), printed.measure, common=common, adjusted=True)
     return e_values(ratio, measure, common=common)
 

@@ -6,14 +6,13 @@ import msgspec
 
 from fourcount.appraisal.findings import EFFECT_MEASURES, Figure, Gap, Interval, Mark, PrintedFigure
 from fourcount.record.outcome import Outcome, PaperMeasure
+from fourcount.record.paper import USUAL_LEVEL
 
 PRINTED = "printed"
 """The method of a figure that is taken over as it is printed."""
 
-USUAL_LEVEL = 0.95
-"""The level of a printed interval that says none: common practice."""
-
 DIFFERENCES = ("risk_difference", "rate_difference")
+RATIOS = tuple(measure for measure in EFFECT_MEASURES if measure not in DIFFERENCES)
 _UNITS = {"one": 1.0, "percent": 100.0, "per-1000": 1000.0}
 
 
@@ -45,6 +44,16 @@ def read_effect(text: str, measure: PaperMeasure, field: str) -> ReadEffect:
     ]
     chosen = next((figure for figure in effects if figure.measure == measure), effects[0] if effects else None)
     return ReadEffect(effect=Gap("effect-unreadable") if chosen is None else chosen, marks=reading.marks)
+
+
+def level_of(printed: PrintedFigure) -> float:
+    """The level of printed limits; the usual one where the print says none."""
+    return printed.level or USUAL_LEVEL
+
+
+def is_adjusted(printed: PrintedFigure, outcome: Outcome) -> bool:
+    """Whether the table's own effect is an adjusted one, by its print or since the reader says for what."""
+    return printed.adjusted or bool(outcome.adjusted_for_text.strip())
 
 
 def as_figure(printed: PrintedFigure) -> Figure | Gap:

@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+from fourcount.record.outcome import PAPER_MEASURES
+
 MEASURES = (
     "risk_index",
     "risk_reference",
@@ -31,7 +33,7 @@ RATE_MEASURES = ("rate_index", "rate_reference", "rate_difference", "rate_ratio"
 TIMED_MEASURES = ("risk_index", "risk_reference", "risk_difference", "number_needed", "risk_ratio")
 """The measures of the form ``risk-at-time``."""
 
-EFFECT_MEASURES = ("risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference")
+EFFECT_MEASURES = PAPER_MEASURES
 """The form ``effect-only`` has exactly one of these, with the method "printed"."""
 
 POOLED_MEASURES = ("pooled_risk_difference", "pooled_risk_ratio", "pooled_odds_ratio")

@@ -6,9 +6,17 @@ import math
 
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.conversion import converted_figure
-from fourcount.appraisal.extras.e_values import E_VALUE_MEASURES, OBSERVATIONAL, e_values
+from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
 from fourcount.appraisal.extras.of_ratio import outcome_is_common
-from fourcount.appraisal.extras.printed import DIFFERENCES, PRINTED, USUAL_LEVEL, as_figure, read_effect
+from fourcount.appraisal.extras.printed import (
+    DIFFERENCES,
+    PRINTED,
+    RATIOS,
+    as_figure,
+    is_adjusted,
+    level_of,
+    read_effect,
+)
 from fourcount.appraisal.findings import (
     Conversion,
     EValues,
@@ -76,15 +84,10 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
 
 def _e_value(printed: PrintedFigure, figure: Figure, outcome: Outcome) -> EValues | Gap | None:
     """Of a printed ratio outside trials."""
-    if outcome.design not in OBSERVATIONAL or printed.measure not in E_VALUE_MEASURES:
+    if outcome.design not in OBSERVATIONAL or printed.measure not in RATIOS:
         return None
     common = outcome_is_common(outcome, None)
     return e_values(figure, printed.measure, common=common, adjusted=is_adjusted(printed, outcome))
-
-
-def is_adjusted(printed: PrintedFigure, outcome: Outcome) -> bool:
-    """Whether the effect is an adjusted one, by its own print or since the reader says for what."""
-    return printed.adjusted or bool(outcome.adjusted_for_text.strip())
 
 
 def _figure(printed: PrintedFigure, outcome: Outcome) -> Figure | Gap:
@@ -124,7 +127,7 @@ def _with_interval(figure: Figure, printed: PrintedFigure) -> tuple[Figure, Reco
     estimate = figure.estimate
     if isinstance(estimate, Gap):
         return figure, estimate
-    rebuilt, level = isinstance(figure.interval, Gap), printed.level or USUAL_LEVEL
+    rebuilt, level = isinstance(figure.interval, Gap), level_of(printed)
     if rebuilt and printed.p is not None and printed.p_relation == "=":
         interval = from_p(estimate, printed.p.value, level, log_scale)
         figure = Figure(estimate=estimate, interval=interval, method=PRINTED)

@@ -5,31 +5,30 @@ from __future__ import annotations
 from collections.abc import Callable
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.clusters import ReadClusters, clusters_of
+from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
 from fourcount.appraisal.extras.printed import adjusted_of
 from fourcount.appraisal.findings import (
     PAIR_MEASURES,
     Figure,
     Gap,
-    Interval,
     OutcomeFindings,
     PairCounts,
-    Probability,
     Totals,
 )
+from fourcount.appraisal.forms.by_method import ByMethod
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import Withheld, withheld_of_pairs
 from fourcount.appraisal.measures import number_needed_from
-from fourcount.appraisal.postponing import PAIRS_NEED_NUMPY, Pace
+from fourcount.appraisal.postponing import NOTHING, PAIRS_NEED_NUMPY, Pace
 from fourcount.appraisal.reach import within_everybody
 from fourcount.record.entry.pairs import read_pairs
 from fourcount.record.entry.readings import PairsReading
 from fourcount.record.outcome import Outcome, Pairs
 from fourcount.record.paper import Choices
 from fourcount.stats import pairs as stats
-from fourcount.stats.methods import PAIR_FAMILIES, method, test
+from fourcount.stats.methods import PAIR_FAMILIES, PairFamily
 
 NEEDS_ALL = ("pair_risk_index", "pair_risk_reference", "pair_difference", "number_needed")
 """The measures that are of all pairs; the ratio is of those with an event, the odds ratio of the discordant ones."""
@@ -48,7 +47,10 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         return nothing_yet(lacking, form="pairs", measures=PAIR_MEASURES, totals=totals, marks=marks)
     pairs, unknown = _oriented(reading, outcome)
     withheld = {**unknown, **withheld_of_pairs(outcome)}
-    figures = _figures(pairs, choices, pace, clusters, withheld)
+    family = PAIR_FAMILIES[choices.family]
+    waiting = PAIRS_NEED_NUMPY if pace.without_numpy else NOTHING
+    by = ByMethod(level=choices.level, without=clusters.elsewhere, waiting=waiting)
+    figures = _figures(pairs, family, by, withheld)
     refused = withheld.get("pair_odds_ratio")
     nothing = Gap(refused or "carried-later")
     case = Case(
@@ -57,7 +59,7 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         given=Gap("concordant-pairs-unknown") if unknown else pairs,
         choices=choices,
         figures=figures,
-        test=Gap(refused) if refused else _test(pairs, choices, pace, clusters),
+        test=Gap(refused) if refused else by.probability(family.test, pairs),
         conversion=nothing,
         patient=nothing,
         marks=marks,
@@ -113,28 +115,16 @@ def _totals(reading: PairsReading) -> Totals:
     )
 
 
-def _figures(
-    pairs: PairCounts, choices: Choices, pace: Pace, clusters: ReadClusters, withheld: Withheld
-) -> dict[str, Figure]:
-    family, level = PAIR_FAMILIES[choices.family], choices.level
-
-    def figure(measure: str, key: str, estimate: float | Gap, *arguments: object) -> Figure:
-        interval: Interval | Gap
-        if clusters.elsewhere is not None:
-            interval = clusters.elsewhere
-        elif pace.without_numpy and key in PAIRS_NEED_NUMPY:
-            interval = Gap("follows")
-        else:
-            interval = method(measure, key).interval(*arguments, level)
-        return Figure(estimate=estimate, interval=interval, method=key)
-
+def _figures(pairs: PairCounts, family: PairFamily, by: ByMethod, withheld: Withheld) -> dict[str, Figure]:
     index, reference, total = stats.index_events(pairs), stats.reference_events(pairs), pairs.total
     computed: dict[str, Callable[[], Figure]] = {
-        "pair_risk_index": lambda: figure("pair_risk", family.risk, stats.risk_index(pairs), index, total),
-        "pair_risk_reference": lambda: figure("pair_risk", family.risk, stats.risk_reference(pairs), reference, total),
-        "pair_difference": lambda: figure("pair_difference", family.difference, stats.difference(pairs), pairs),
-        "pair_ratio": lambda: figure("pair_ratio", family.ratio, stats.ratio(pairs), pairs),
-        "pair_odds_ratio": lambda: figure("pair_odds_ratio", family.odds_ratio, stats.odds_ratio(pairs), pairs),
+        "pair_risk_index": lambda: by.figure("pair_risk", family.risk, stats.risk_index(pairs), index, total),
+        "pair_risk_reference": lambda: by.figure(
+            "pair_risk", family.risk, stats.risk_reference(pairs), reference, total
+        ),
+        "pair_difference": lambda: by.figure("pair_difference", family.difference, stats.difference(pairs), pairs),
+        "pair_ratio": lambda: by.figure("pair_ratio", family.ratio, stats.ratio(pairs), pairs),
+        "pair_odds_ratio": lambda: by.figure("pair_odds_ratio", family.odds_ratio, stats.odds_ratio(pairs), pairs),
     }
     return {key: compute() for key, compute in computed.items() if key not in withheld}
 
@@ -145,14 +135,6 @@ def _measure(key: str, figures: dict[str, Figure], withheld: Withheld, *, welcom
     if key == "number_needed":
         return number_needed_from(within_everybody(figures["pair_difference"]), welcome=welcome)
     return given_or_why(figures[key])
-
-
-def _test(pairs: PairCounts, choices: Choices, pace: Pace, clusters: ReadClusters) -> Probability:
-    key = PAIR_FAMILIES[choices.family].test
-    if clusters.elsewhere is not None:
-        return Probability(p=clusters.elsewhere, method=key)
-    postponed = pace.without_numpy and key in PAIRS_NEED_NUMPY
-    return Probability(p=Gap("follows") if postponed else test(key).p(pairs), method=key)
 
 
 def _sum(one: int | None, other: int | None) -> int | None:

@@ -3,29 +3,28 @@
 from __future__ import annotations
 
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.clusters import ReadClusters, clusters_of
+from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
 from fourcount.appraisal.extras.printed import adjusted_of
 from fourcount.appraisal.findings import (
     RATE_MEASURES,
     Figure,
     Gap,
-    Interval,
     OutcomeFindings,
-    Probability,
     Rates,
     Totals,
 )
+from fourcount.appraisal.forms.by_method import ByMethod
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import withheld_of_rates
-from fourcount.appraisal.postponing import RATES_NEED_NUMPY, Pace
+from fourcount.appraisal.postponing import NOTHING, RATES_NEED_NUMPY, Pace
 from fourcount.record.entry.person_time import read_person_time
 from fourcount.record.entry.readings import GroupRate, PersonTimeReading
 from fourcount.record.outcome import Outcome, PersonTime
 from fourcount.record.paper import Choices
 from fourcount.stats import rates as stats
-from fourcount.stats.methods import RATE_FAMILIES, method, test
+from fourcount.stats.methods import RATE_FAMILIES, RateFamily
 
 
 def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
@@ -38,7 +37,10 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     if isinstance(rates, Gap):
         return nothing_yet(rates, form="person-time", measures=RATE_MEASURES, totals=totals, marks=marks)
     withheld = withheld_of_rates(outcome.design)
-    figures = {} if withheld else _figures(rates, choices, pace, clusters)
+    family = RATE_FAMILIES[choices.family]
+    waiting = RATES_NEED_NUMPY if pace.without_numpy else NOTHING
+    by = ByMethod(level=choices.level, without=clusters.elsewhere, waiting=waiting)
+    figures = {} if withheld else _figures(rates, family, by)
     nothing = Gap(withheld["rate_ratio"]) if withheld else Gap("carried-later")
     case = Case(
         outcome=outcome,
@@ -46,7 +48,7 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         given=rates,
         choices=choices,
         figures=figures,
-        test=nothing if withheld else _test(rates, choices, pace, clusters),
+        test=nothing if withheld else by.probability(family.test, rates),
         conversion=nothing,
         patient=nothing,
         marks=marks,
@@ -82,31 +84,11 @@ def _totals(reading: PersonTimeReading) -> Totals:
     return Totals(first_left=first, second_left=second, left=left)
 
 
-def _figures(rates: Rates, choices: Choices, pace: Pace, clusters: ReadClusters) -> dict[str, Figure]:
-    family, level = RATE_FAMILIES[choices.family], choices.level
-
-    def figure(measure: str, key: str, estimate: float | Gap, *arguments: object) -> Figure:
-        interval: Interval | Gap
-        if clusters.elsewhere is not None:
-            interval = clusters.elsewhere
-        elif pace.without_numpy and key in RATES_NEED_NUMPY:
-            interval = Gap("follows")
-        else:
-            interval = method(measure, key).interval(*arguments, level)
-        return Figure(estimate=estimate, interval=interval, method=key)
-
+def _figures(rates: Rates, family: RateFamily, by: ByMethod) -> dict[str, Figure]:
     index, reference = (rates.index_events, rates.index_time), (rates.reference_events, rates.reference_time)
     return {
-        "rate_index": figure("rate", family.rate, stats.rate(*index), *index),
-        "rate_reference": figure("rate", family.rate, stats.rate(*reference), *reference),
-        "rate_difference": figure("rate_difference", family.difference, stats.rate_difference(rates), rates),
-        "rate_ratio": figure("rate_ratio", family.ratio, stats.rate_ratio(rates), rates),
+        "rate_index": by.figure("rate", family.rate, stats.rate(*index), *index),
+        "rate_reference": by.figure("rate", family.rate, stats.rate(*reference), *reference),
+        "rate_difference": by.figure("rate_difference", family.difference, stats.rate_difference(rates), rates),
+        "rate_ratio": by.figure("rate_ratio", family.ratio, stats.rate_ratio(rates), rates),
     }
-
-
-def _test(rates: Rates, choices: Choices, pace: Pace, clusters: ReadClusters) -> Probability:
-    key = RATE_FAMILIES[choices.family].test
-    if clusters.elsewhere is not None:
-        return Probability(p=clusters.elsewhere, method=key)
-    postponed = pace.without_numpy and key in RATES_NEED_NUMPY
-    return Probability(p=Gap("follows") if postponed else test(key).p(rates), method=key)

@@ -22,9 +22,9 @@ from fourcount.appraisal.patient import carry
 from fourcount.appraisal.postponing import Pace
 from fourcount.appraisal.starting_risk import Typed, marks_of, starting_risk, typed_risk
 from fourcount.record.entry.readings import PrintedRisk, RiskAtTimeReading
-from fourcount.record.entry.risk_at_time import USUAL_LEVEL, read_risk_at_time
+from fourcount.record.entry.risk_at_time import read_risk_at_time
 from fourcount.record.outcome import Outcome, RiskAtTime
-from fourcount.record.paper import Choices
+from fourcount.record.paper import USUAL_LEVEL, Choices
 from fourcount.stats import timed as stats
 from fourcount.stats.methods import method
 from fourcount.stats.results import LimitedRisk

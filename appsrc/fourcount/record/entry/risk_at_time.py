@@ -11,9 +11,7 @@ from fourcount.record.entry.digits import LONGEST, decimal_number, plain, specim
 from fourcount.record.entry.level import read_level
 from fourcount.record.entry.readings import Mark, PrintedRisk, Proportion, RiskAtTimeReading, Unreadable
 from fourcount.record.outcome import RiskAtTime
-
-USUAL_LEVEL = 0.95
-"""The level of printed limits where none is typed: common practice."""
+from fourcount.record.paper import USUAL_LEVEL
 
 _NUMBER = r"(?:[0-9][0-9]*(?:[.,\u00b7][0-9]+)?|[.,\u00b7][0-9]+)"
 _SIGN = r"(?: *(?P<{}>%|per ?cent))?"
