@@ -131,8 +131,9 @@ def _heading(text: str) -> str:
     """A heading without what only says how its cells are printed."""
     for ending in ("% (95% CI)", "n/N (%)", "(n/N)", "n (%)", "no. (%)", "No. (%)", "N (%)", "n/N", "(%)", "(n)"):
         if text.endswith(ending):
-            return text.removesuffix(ending).rstrip(" ,-:\u2013\u2014")
-    return text
+            text = text.removesuffix(ending).rstrip(" ,-:\u2013\u2014")
+            break
+    return text if any(character.isalnum() for character in text) else ""
 
 
 def _strata(found: Strata) -> Pasted:

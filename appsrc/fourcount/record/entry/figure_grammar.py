@@ -9,7 +9,7 @@ from math import isinf
 import msgspec
 
 from fourcount.record.entry.figure_names import ADJUSTED, Name, name_at
-from fourcount.record.entry.p_values import FoundP, Relation, p_at
+from fourcount.record.entry.p_values import FoundP, Relation, p_at, statistic_at
 from fourcount.record.entry.readings import PrintedMeasure, PrintedNumber, PrintedUnit
 from fourcount.record.entry.tokens import Token
 from fourcount.record.entry.word_list import words
@@ -42,6 +42,7 @@ _TIME_WORDS = frozenset(
 )
 _USUAL_LEVELS = (80, 90, 95, 97.5, 98, 99, 99.9)
 _RISKS = ("risk", "incidence", "mortality", "prevalence", "proportion")
+_BEHIND_OR = frozenset(("for", "or", "per", "in", "among", "after", "comparing", "associated"))
 _LONGEST_WAY = 14
 _ENDLESS = ("inf", "infinity", "infinite", "nan")
 _EXPONENT = re.compile("e[0-9]+|e-[0-9]+")
@@ -118,6 +119,8 @@ class Grammar:
                 name = name and (place, name[1])
             elif p_found := p_at(self.tokens, place):
                 place = self._take_p(found, place, p_found)
+            elif after := statistic_at(self.tokens, place):
+                place = after
             elif self._begins_figure(place, name is not None):
                 figure = self._figure(place, name)
                 figure.level = figure.level or level
@@ -136,7 +139,8 @@ class Grammar:
 
     def _skipped(self, place: int) -> int:
         """The place after a token that is taken for nothing; a number other than a length of time is noted."""
-        if self.tokens[place].kind == "number" and self._at(place + 1).lower not in _TIME_WORDS:
+        counts = self._at(place + 1).lower not in _TIME_WORDS and self._at(place - 1).lower != "per"
+        if self.tokens[place].kind == "number" and counts:
             self.leftover.append(self.tokens[place])
         return place + 1
 
@@ -156,11 +160,13 @@ class Grammar:
 
     def _name(self, place: int) -> Name | None:
         name = name_at(self.tokens, place)
+        if name and self._at(place - 1).lower in ("log", "ln", "loge", "logarithm"):
+            return msgspec.structs.replace(name, measure=None)
         if name is None and self.unnamed and self.tokens[place].lower in _RISKS:
             return Name("risk", 1)
         if name and self.tokens[place].text == "OR":
             following = self._at(place + 1)
-            if following.kind == "word" and following.lower not in _FILLERS | {"for", "or"}:
+            if following.kind == "word" and following.lower not in _FILLERS | _BEHIND_OR:
                 return None
         return name
 
@@ -176,7 +182,7 @@ class Grammar:
             return False
         if following.lower in _TIME_WORDS or following.text == "/" or following.lower in ("of", "patients"):
             return False
-        if self._at(place - 1).text in ("/", "<", ">"):
+        if self._at(place - 1).text in ("/", "<", ">") or (named and self._at(place - 1).lower == "per"):
             return False
         return not (self._at(place - 1).lower in ("of",) and not named)
 

@@ -17,6 +17,7 @@ _P_WORDS = ("p", "p-value", "p-values")
 _NOT_OF_AN_EFFECT = ("interaction", "trend", "heterogeneity", "noninferiority", "non-inferiority", "homogeneity")
 _BETWEEN = ("value", "values", "of", "was", "is", "for", "the", "by", "less", "than", "=", "<", ">")
 _FARTHEST = 9
+_STATISTICS = ("\u03c72", "\u03c7\u00b2", "chi2", "x2", "chi-square", "chi-squared", "z", "t", "f", "df", "d.f")
 _EXPONENT = re.compile(r"e-([0-9]{1,3})")
 
 
@@ -72,3 +73,14 @@ def _number(tokens: Sequence[Token], place: int) -> tuple[PrintedNumber, int]:
     text = token.text + "".join(following[:length])
     value, decimals = token.value * 10.0 ** -int(digits), token.decimals + int(digits)
     return PrintedNumber(text=text, value=value, decimals=decimals), place + 1 + length
+
+
+def statistic_at(tokens: Sequence[Token], place: int) -> int:
+    """The place after a test statistic, "\u03c72 = 11.2" or "t(12) = 2.1", which is no result; 0 where none begins."""
+    if tokens[place].lower not in _STATISTICS:
+        return 0
+    step = place + 1
+    if [token.text for token in tokens[step : step + 1]] == ["("]:
+        step += 3
+    following = tokens[step : step + 2]
+    return step + 2 if len(following) == 2 and following[0].text == "=" and following[1].kind == "number" else 0

@@ -60,7 +60,11 @@ def _finished(figure: Figure, printed: Print, measure: PaperMeasure) -> PrintedF
     """A figure with its measure and unit decided; None for one of another kind or without anything usable."""
     called = figure.measure_or(measure)
     p = figure.p if figure.p and 0 <= figure.p.value <= 1 else None
-    if called is None or (figure.estimate is None and p is None):
+    if (
+        called is None
+        or (called.endswith("ratio") and figure.unit == "percent")
+        or (figure.estimate is None and p is None)
+    ):
         return None
     level = figure.level if figure.level and _LOWEST_LEVEL <= figure.level < 1 else None
     return PrintedFigure(
@@ -90,7 +94,8 @@ def _doubts(figure: Figure, printed: Print, field: str) -> Sequence[Mark]:
     """What is odd in one printed figure; most of it is used all the same, as printed."""
     text = printed.piece(figure.first, figure.after)
     marks = []
-    if figure.named and figure.name is not None and figure.name.measure is None:
+    other = figure.named and figure.name is not None and figure.name.measure is None
+    if other or (figure.unit == "percent" and (figure.measure_or("risk_ratio") or "").endswith("ratio")):
         marks.append(_mark(field, "paper-measure", text))
     if figure.one_limit:
         marks.append(_mark(field, "paper-one-limit", text, used=True, limit=figure.one_limit))

@@ -53,19 +53,25 @@ def with_risks(matrix: Matrix) -> Matrix:
     "20.2 (41)" is a percentage with its count where the total proves it.
     """
     rows = [list(row) for row in matrix.rows]
+    turned = matrix.turned()
     for row, label in enumerate(matrix.labels):
         for column, head in enumerate(matrix.heads):
             told = next((each.label for each in (head, label) if role_of(each.label) == "percent"), None)
             risk = rows[row][column].risk
-            counted, total = rows[row][column].counted, head.total or label.total
-            if counted and counted.percent and counted.events and total:
-                if gives(counted.percent, counted.events.whole or 0, total.whole or 0):
-                    rows[row][column] = Cell(text=rows[row][column].text, quantity=counted)
+            counted = rows[row][column].counted
+            wholes = [head.total, label.total, *(cell.count for cell in (*matrix.rows[row], *turned.rows[column]))]
+            if counted and any(whole and _is_of(counted, whole) for whole in wholes):
+                rows[row][column] = Cell(text=rows[row][column].text, quantity=counted)
             elif told is not None and risk:
                 level = _LEVEL.search(told)
                 risk = msgspec.structs.replace(risk, level_text=f"{level[1]}%" if level else "")
                 rows[row][column] = Cell(text=rows[row][column].text, quantity=risk)
     return msgspec.structs.replace(matrix, rows=tuple(tuple(row) for row in rows))
+
+
+def _is_of(quantity: Quantity, total: Token) -> bool:
+    events, percent = quantity.events, quantity.percent
+    return events is not None and percent is not None and gives(percent, events.whole or 0, total.whole or 0)
 
 
 def _is_result(matrix: Matrix, column: int) -> bool:

@@ -305,6 +305,16 @@ def _percent_fits(
     return True
 
 
+def _nested(matrix: Matrix, column: int, totals: Sequence[Token | None]) -> bool:
+    """Whether one row is all people and the other row a part of them ("100%" and "9.2%")."""
+    for whole, part in ((0, 1), (1, 0)):
+        hundred, percent = matrix.rows[whole][column].percent, matrix.rows[part][column].percent
+        all_of, some = totals[whole], totals[part]
+        if hundred and percent and all_of and some and hundred.value == 100 and percent.value < 100:
+            return gives(percent, some.whole or 0, all_of.whole or 0)
+    return False
+
+
 def _percentages(matrix: Matrix, roles: Sequence[Role]) -> Understood | None:
     """Percentages of totals that stand in another column or beside the labels."""
     percents = [place for place in range(len(matrix.heads)) if all(row[place].percent for row in matrix.rows)]
@@ -314,7 +324,7 @@ def _percentages(matrix: Matrix, roles: Sequence[Role]) -> Understood | None:
     if not all(totals):
         counts = [place for place in range(len(matrix.heads)) if all(row[place].count for row in matrix.rows)]
         totals = _tokens(matrix, counts[0]) if counts and roles[counts[0]] in ("total", "unknown") else []
-    if len(totals) != 2 or not all(totals):
+    if len(totals) != 2 or not all(totals) or _nested(matrix, percents[0], totals):
         return None
     pair = [
         Quantity(first=0, after=1, percent=row[percents[0]].percent, total=total)

@@ -32,9 +32,16 @@ def corner_says(corner: str) -> int:
 
 
 def roles_of(heads: Sequence[Head]) -> list[Role]:
-    """The roles of all headings; "controls" are those without the event only where "cases" stand beside them."""
+    """The roles of all headings; "controls" are those without the event only where "cases" stand beside them.
+
+    "n" is the part and "N" the whole where both stand side by side.
+    """
     said = [set(heading_words(head.label)) for head in heads]
     roles = [role_of(head.label) for head in heads]
     if any("cases" in each for each in said):
         roles = ["others" if "controls" in each else role for each, role in zip(said, roles, strict=True)]
+    letters = [head.label.strip(" ,.").rpartition(" ")[2] for head in heads]
+    if {"n", "N"} <= set(letters):
+        parts: dict[str, Role] = {"n": "events", "N": "total"}
+        roles = [parts.get(letter, role) for letter, role in zip(letters, roles, strict=True)]
     return roles

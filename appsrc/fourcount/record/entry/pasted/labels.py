@@ -237,7 +237,8 @@ class Labels:
             after -= 1
         while start < after and self.tokens[after - 1].kind == "mark":
             after -= 1
-        if not any(token.kind == "word" for token in self.tokens[start:after]):
+        words = [token.lower for token in self.tokens[start:after] if token.kind == "word"]
+        if not words or words[0] == "each":
             return ""
         lead = self.tokens[kept].text + " " if kept is not None else ""
         return (lead + self.printed.piece(start, after)).rstrip(".").replace("\n", " ")

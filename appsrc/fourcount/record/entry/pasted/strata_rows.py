@@ -6,12 +6,17 @@ from collections.abc import Sequence
 
 import msgspec
 
+from fourcount.record.entry.pasted.cells import Cell
 from fourcount.record.entry.pasted.groups import two_groups
-from fourcount.record.entry.pasted.headings import is_sum, role_of
+from fourcount.record.entry.pasted.heading_sets import roles_of
+from fourcount.record.entry.pasted.headings import Role, is_sum
 from fourcount.record.entry.pasted.matrix import Head, Matrix
+from fourcount.record.entry.pasted.proportions import gives
 from fourcount.record.entry.pasted.quantities import Quantity
 from fourcount.record.entry.pasted.understood import Understood
 from fourcount.record.entry.tokens import Token
+
+_PROVEN = (0, 2, 1, 3)
 
 
 class Strata(msgspec.Struct, frozen=True, kw_only=True):
@@ -48,10 +53,12 @@ def _wide(matrix: Matrix) -> Strata | None:
     if len(matrix.heads) != 4 or any(head.total for head in matrix.heads):
         return None
     rows = [row for row in range(len(matrix.rows)) if not is_sum(matrix.labels[row].label)] or [0]
+    order = _ordered(matrix, rows)
+    matrix = matrix.only(range(len(matrix.rows)), order)
     if any(cell.count is None for row in rows for cell in matrix.rows[row][::2]):
         return None
     groups = (_shared(matrix.heads[0], matrix.heads[1]), _shared(matrix.heads[2], matrix.heads[3]))
-    roles = [role_of(_without(head.label, groups[place // 2])) for place, head in enumerate(matrix.heads)]
+    roles = _roles(matrix)
     timed = roles[1] == roles[3] == "time" or any(
         cell.quantity and cell.quantity.unit for row in rows for cell in matrix.rows[row][1::2]
     )
@@ -61,11 +68,37 @@ def _wide(matrix: Matrix) -> Strata | None:
     others = roles[1] == roles[3] == "others" or any(
         _whole(matrix, row, place) > _whole(matrix, row, place + 1) for row in rows for place in (0, 2)
     )
-    doubts = set() if roles[1] == roles[3] and roles[1] in ("total", "others", "time") else {"others-or-totals"}
+    doubts = (
+        set()
+        if order == _PROVEN or (roles[1] == roles[3] and roles[1] in ("total", "others", "time"))
+        else {"others-or-totals"}
+    )
     tables = [_table(matrix, row, groups, "time" if timed else "others" if others else "total") for row in rows]
     if len(rows) < len(matrix.rows):
         doubts.add("total-left-out")
     return _strata([matrix.labels[row].label for row in rows], tables, doubts)
+
+
+def _roles(matrix: Matrix) -> list[Role]:
+    groups = (_shared(matrix.heads[0], matrix.heads[1]), _shared(matrix.heads[2], matrix.heads[3]))
+    return roles_of([Head(_without(head.label, groups[place // 2])) for place, head in enumerate(matrix.heads)])
+
+
+def _ordered(matrix: Matrix, rows: Sequence[int]) -> tuple[int, ...]:
+    """The columns as events and total of one group, then of the other, where headings or percentages tell."""
+    roles = _roles(matrix)
+    if roles[0] == roles[2] == "total" and roles[1] == roles[3] != "total":
+        return 1, 0, 3, 2
+    if all(_proves(matrix.rows[row][place], matrix.rows[row][place + 2]) for row in rows for place in (0, 1)):
+        return _PROVEN
+    return 0, 1, 2, 3
+
+
+def _proves(part: Cell, whole: Cell) -> bool:
+    quantity, total = part.quantity, whole.count
+    if quantity is None or quantity.percent is None or quantity.events is None or total is None:
+        return False
+    return gives(quantity.percent, quantity.events.whole or 0, total.whole or 0)
 
 
 def _whole(matrix: Matrix, row: int, column: int) -> int:

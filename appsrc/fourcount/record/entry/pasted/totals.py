@@ -129,7 +129,8 @@ def _ways(
     between = [each for each in found if first.after <= each.place < second.first][:_MOST]
     behind = [each for each in found if second.after <= each.place < end][:_MOST]
     after = [each for each in found if each.place >= second.after][:_MOST]
-    yield from (((each, each), True) for each in behind if _of_each(tokens, each.place))
+    each_group = [each for each in (*behind, *before[::-1]) if _of_each(tokens, each.place)]
+    yield from (((each, each), each in behind) for each in each_group)
     own_first, own_second = first.total is not None, second.total is not None
     if own_first and own_second:
         yield (None, None), True
@@ -152,7 +153,8 @@ def _ways(
 
 def _of_each(tokens: Sequence[Token], place: int) -> bool:
     """Whether a number is the total of both groups: "of 300 each"."""
-    return place + 1 < len(tokens) and tokens[place + 1].lower in ("each", "per")
+    behind = [token.lower for token in tokens[place + 1 : place + 4]]
+    return behind[:1] in (["each"], ["per"]) or behind[:2] in (["to", "each"], ["in", "each"])
 
 
 def _neighbours(group: Sequence[Candidate], backwards: object) -> Iterator[tuple[Candidate, Candidate]]:
