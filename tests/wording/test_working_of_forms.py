@@ -132,6 +132,14 @@ def test_a_printed_effect_shows_its_text_and_what_follows_from_it():
     assert rows_of("hazard_ratio", effect_only(text="0.72; 90% CI 0.55 to 0.92"))["Level"] == "90%"
 
 
+def test_the_papers_own_approximations_stand_beside_the_full_normal_tail():
+    """Altman and Bland 2011: exp(−0.717 z − 0.416 z²), and their worked example of 17 points with p = 0.032."""
+    limits = rows_of("hazard_ratio", effect_only("hazard_ratio", "0.81 (0.70 to 0.94)"))
+    assert limits["p by the approximation exp(−0.717 z − 0.416 z²)"] == "0.0051"  # e^−(2.0087 + 3.2654)
+    p = rows_of("risk_difference", effect_only("risk_difference", "17%, p = 0.032"))
+    assert p["Interval by the approximation zp = −0.862 + √(0.743 − 2.404 ln p)"] == "1.4 to 32.6"
+
+
 def test_clusters_divide_the_counts_of_every_method():
     """The others are not told as if people were independent, and an exact one says that it cannot."""
     clustered = of_total(icc_text="0.02", cluster_size_text="21")

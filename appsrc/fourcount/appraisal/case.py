@@ -24,7 +24,6 @@ from fourcount.appraisal.measures import Figures
 from fourcount.record.outcome import Form, Outcome
 from fourcount.record.paper import Choices
 
-
 Facts = dict[str, Fact]
 """What a rule answers with: the facts for its sentence."""
 

@@ -12,19 +12,22 @@ from fourcount.appraisal.findings import (
     Interval,
     Losses,
     OutcomeFindings,
+    PrintedFigure,
     Recovered,
 )
 from fourcount.record.outcome import Form
-from fourcount.record.paper import Choices
+from fourcount.record.paper import USUAL_LEVEL, Choices
 from fourcount.stats.attributable import levin, levin_interval
 from fourcount.stats.entries.entry import Calculation
 from fourcount.stats.entries.extras import EXTRAS
 from fourcount.stats.entries.recovery import RECOVERIES
+from fourcount.stats.recovery import approximate_from_p, approximate_p
 from fourcount.wording import limits, numbers
 from fourcount.wording.extras import fraction_below_none
 from fourcount.wording.form import measure_of
 from fourcount.wording.numbers import plain, quantity, whole
-from fourcount.wording.working.parts import ESTIMATE, OTHER_METHODS, SPACE, Row, about
+from fourcount.wording.printed import PER_UNIT
+from fourcount.wording.working.parts import ESTIMATE, OTHER_METHODS, SPACE, Row, about, interval_words
 
 CALCULATIONS: dict[str, Calculation] = {entry.key: entry for entry in (*EXTRAS, *RECOVERIES)}
 ENTRIES = {
@@ -40,6 +43,8 @@ RATIOS: dict[Form, str] = {"person-time": "rate_ratio", "strata": "pooled_risk_r
 """The ratio that a form's fractions are of, where it is not the risk ratio."""
 
 FRACTIONS = ("attributable_exposed", "prevented_exposed", "attributable_population")
+APPROXIMATE_P = "p by the approximation exp(−0.717 z − 0.416 z²)"
+APPROXIMATE_INTERVAL = "Interval by the approximation zp = −0.862 + √(0.743 − 2.404 ln p)"
 CONVERSIONS = {"odds_ratio": "e-value-odds", "hazard_ratio": "e-value-hazards"}
 
 
@@ -64,8 +69,26 @@ def recovered_rows(findings: OutcomeFindings) -> list[Row]:
         ("Standard error", plain(found.standard_error)),
         ("z", plain(found.z, 2)),
         ("p", numbers.p_value(found.p)),
+        *_approximately(found, findings),
         *about(entry),
     ]
+
+
+def _approximately(found: Recovered, findings: OutcomeFindings) -> list[Row]:
+    """What the paper's own formula, which a reader may follow with a pencil, makes of the same print."""
+    if not found.from_p:
+        return [(APPROXIMATE_P, numbers.p_value(approximate_p(found.z)))]
+    printed = findings.given
+    if not isinstance(printed, PrintedFigure) or printed.p is None:
+        return []
+    figure = measure_of(printed.measure, findings)
+    if not isinstance(figure, Figure) or isinstance(figure.estimate, Gap):
+        return []
+    interval = approximate_from_p(
+        figure.estimate, printed.p.value, printed.level or USUAL_LEVEL, log_scale=found.log_scale
+    )
+    per = PER_UNIT[printed.unit] if printed.measure == "rate_difference" else 1
+    return [(APPROXIMATE_INTERVAL, interval_words(printed.measure, interval, figure, figure.method, per))]
 
 
 def _fraction(name: str, findings: OutcomeFindings) -> list[Row]:
