@@ -60,11 +60,7 @@ def _finished(figure: Figure, printed: Print, measure: PaperMeasure) -> PrintedF
     """A figure with its measure and unit decided; None for one of another kind or without anything usable."""
     called = figure.measure_or(measure)
     p = figure.p if figure.p and 0 <= figure.p.value <= 1 else None
-    if (
-        called is None
-        or (called.endswith("ratio") and figure.unit == "percent")
-        or (figure.estimate is None and p is None)
-    ):
+    if called is None or _is_percent_ratio(figure, called) or (figure.estimate is None and p is None):
         return None
     level = figure.level if figure.level and _LOWEST_LEVEL <= figure.level < 1 else None
     return PrintedFigure(
@@ -81,6 +77,11 @@ def _finished(figure: Figure, printed: Print, measure: PaperMeasure) -> PrintedF
     )
 
 
+def _is_percent_ratio(figure: Figure, called: str | None) -> bool:
+    """Whether a ratio is printed as a percentage, which may be the ratio or the change from one."""
+    return called is not None and called.endswith("ratio") and figure.unit == "percent"
+
+
 def _unit(figure: Figure, called: str) -> PrintedUnit:
     if called not in ("risk_difference", "rate_difference", "relative_reduction", "risk"):
         return "one"
@@ -95,7 +96,7 @@ def _doubts(figure: Figure, printed: Print, field: str) -> Sequence[Mark]:
     text = printed.piece(figure.first, figure.after)
     marks = []
     other = figure.named and figure.name is not None and figure.name.measure is None
-    if other or (figure.unit == "percent" and (figure.measure_or("risk_ratio") or "").endswith("ratio")):
+    if other or _is_percent_ratio(figure, figure.measure_or("risk_ratio")):
         marks.append(_mark(field, "paper-measure", text))
     if figure.one_limit:
         marks.append(_mark(field, "paper-one-limit", text, used=True, limit=figure.one_limit))

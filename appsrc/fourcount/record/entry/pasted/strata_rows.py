@@ -68,11 +68,8 @@ def _wide(matrix: Matrix) -> Strata | None:
     others = roles[1] == roles[3] == "others" or any(
         _whole(matrix, row, place) > _whole(matrix, row, place + 1) for row in rows for place in (0, 2)
     )
-    doubts = (
-        set()
-        if order == _PROVEN or (roles[1] == roles[3] and roles[1] in ("total", "others", "time"))
-        else {"others-or-totals"}
-    )
+    told = order == _PROVEN or (roles[1] == roles[3] and roles[1] in ("total", "others", "time"))
+    doubts: set[str] = set() if told else {"others-or-totals"}
     tables = [_table(matrix, row, groups, "time" if timed else "others" if others else "total") for row in rows]
     if len(rows) < len(matrix.rows):
         doubts.add("total-left-out")
