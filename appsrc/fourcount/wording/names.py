@@ -6,6 +6,7 @@ from typing import Literal
 
 from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Column, Effect, Outcome
+from fourcount.wording import event_names
 
 Group = Literal["index", "reference"]
 
@@ -15,6 +16,7 @@ EVENT_STAND_IN = "had the event"
 COLUMN_STAND_INS: dict[Column, str] = {"left": EVENT_STAND_IN, "right": "did not have the event"}
 """What an unnamed column says, whichever of the two is counted: print puts the events left (common practice)."""
 
+EXPOSED: dict[Column, str] = {"left": "was exposed", "right": "was not exposed"}
 NAMED_EVENT = "had the event “{heading}”"
 WITHOUT = "did not have the outcome “{outcome}”"
 DID_NOT = "did not"
@@ -70,26 +72,32 @@ def in_group(outcome: Outcome, group: Group) -> str:
 
 def outcome_name(outcome: Outcome) -> str:
     """The outcome's name, which is the left column's; where the right one is counted, it says so."""
-    name = outcome.name_text.strip()
+    name = event_names.without_unit(outcome.name_text.strip())
     return name if not name or outcome.counted == "left" else f"Other than {mid_sentence(name)}"
 
 
 def event_words(outcome: Outcome) -> str:
     """The counted event as the reader's sentence says it: "fell at least once"."""
     words, heading = bare(outcome.event_words_text), bare(outcome.event_heading_text)
-    if words or not heading:
-        return words or _unnamed_event(outcome)
-    return heading if heading.split(" ", 1)[0].lower() in VERBS else NAMED_EVENT.format(heading=heading)
+    if words:
+        return event_names.of_people(words) or words
+    return _headed(heading) if heading else _unnamed_event(outcome)
 
 
 def other_words(outcome: Outcome) -> str:
     """The other outcome beside the counted one: "did not fall", or a bare "did not" where only the event is named."""
-    return _other_name(outcome) or (DID_NOT if _event_name(outcome) else COLUMN_STAND_INS[_other_column(outcome)])
+    name = _other_name(outcome)
+    if name:
+        return event_names.of_people(name) or name
+    return DID_NOT if _event_name(outcome) else _stand_ins(outcome)[_other_column(outcome)]
 
 
 def event_key(outcome: Outcome) -> str:
     """The counted event in a picture's key."""
-    return bare(outcome.event_heading_text) or bare(outcome.event_words_text) or _unnamed_event(outcome)
+    heading, words = bare(outcome.event_heading_text), bare(outcome.event_words_text)
+    if heading:
+        return event_names.without_unit(heading)
+    return event_names.of_people(words) or words or _unnamed_event(outcome)
 
 
 def other_key(outcome: Outcome) -> str:
@@ -100,7 +108,21 @@ def other_key(outcome: Outcome) -> str:
 def _unnamed_event(outcome: Outcome) -> str:
     """The counted column without a name: as the lack of the other one if that is named, else by its place."""
     other = _other_name(outcome)
-    return WITHOUT.format(outcome=other) if other else COLUMN_STAND_INS[outcome.counted]
+    if other:
+        return event_names.lacked_by(other) or WITHOUT.format(outcome=other)
+    return _stand_ins(outcome)[outcome.counted]
+
+
+def _headed(heading: str) -> str:
+    """A short name of the event where no words were typed: with a verb where it has one, or can only take one."""
+    if heading.split(" ", 1)[0].lower() in VERBS:
+        return heading
+    return event_names.of_people(heading) or NAMED_EVENT.format(heading=event_names.without_unit(heading))
+
+
+def _stand_ins(outcome: Outcome) -> dict[Column, str]:
+    """What unnamed columns say: in a matched case-control study people were exposed or not."""
+    return EXPOSED if outcome.design == "matched" else COLUMN_STAND_INS
 
 
 def _event_name(outcome: Outcome) -> str:
@@ -108,7 +130,7 @@ def _event_name(outcome: Outcome) -> str:
 
 
 def _other_name(outcome: Outcome) -> str:
-    return bare(outcome.other_words_text) or bare(outcome.other_heading_text)
+    return bare(outcome.other_words_text) or event_names.without_unit(bare(outcome.other_heading_text))
 
 
 def _other_column(outcome: Outcome) -> Column:
