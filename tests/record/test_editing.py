@@ -288,3 +288,20 @@ def test_one_outcome_of_a_record_is_replaced() -> None:
     for place in (-1, 2):
         with pytest.raises(IndexError):
             editing.with_outcome(RECORD, place, new)
+
+
+@pytest.mark.parametrize("field", ["paper", "adjusted"])
+def test_a_printed_effect_is_called_what_it_names(field: str) -> None:
+    """Typing a name settles the measure; without the name it stays; a p alone names none, nor does a number needed."""
+
+    def called(outcome: Outcome) -> str:
+        return str(getattr(outcome, f"{field}_measure"))
+
+    outcome = editing.edit_text(Outcome(adjusted_measure="risk_ratio"), f"{field}_text", "0.49")
+    assert called(outcome) == "risk_ratio"
+    outcome = editing.edit_text(outcome, f"{field}_text", "aOR 0.49 (0.32 to 0.75); P = 0.001")
+    assert called(outcome) == "odds_ratio"
+    for text in ("0.49 (0.32 to 0.75)", "P = 0.001", "NNT 12", ""):
+        assert called(editing.edit_text(outcome, f"{field}_text", text)) == "odds_ratio"
+    assert called(editing.edit_text(outcome, f"{field}_text", "hazard ratio 0.7, OR 0.5")) == "hazard_ratio"
+    assert called(editing.edit_text(outcome, f"{field}_text", "RR 0.5 " * 100_000)) == "odds_ratio"

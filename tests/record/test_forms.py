@@ -223,3 +223,16 @@ def test_clearing_keeps_words_of_the_table():
     assert editing.clear_table(strata).table == Strata(strata=(Stratum(label_text="under 65"), Stratum()))
     assert editing.clear_table(Outcome(table=EffectOnly(), paper_text="RR 2")).paper_text == ""
     assert read_pairs(editing.clear_table(PAIRED).table).both is None
+
+
+def test_a_lone_effect_begins_as_its_specimen_does() -> None:
+    """Nothing typed: an odds ratio, as in the specimen; what was typed or chosen otherwise keeps its name."""
+    assert editing.in_form(Outcome(), "effect-only").paper_measure == "odds_ratio"
+    assert editing.in_form(Outcome(paper_text="0.5"), "effect-only").paper_measure == "risk_ratio"
+    assert editing.in_form(Outcome(paper_measure="hazard_ratio"), "effect-only").paper_measure == "hazard_ratio"
+
+
+def test_person_time_begins_in_person_years() -> None:
+    """The unit is a value that can be typed over, not only a hint."""
+    outcome = editing.in_form(FALLS, "person-time")
+    assert outcome.table == PersonTime(first_left_text="38", second_left_text="70", unit_text="person-years")

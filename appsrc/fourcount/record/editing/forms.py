@@ -32,6 +32,9 @@ if TYPE_CHECKING:
 FOUR_COUNTS = (EventsAndOthers, EventsOfTotal, PercentOfTotal)
 ROWS = (("first_left_text", "first_right_text"), ("second_left_text", "second_right_text"))
 
+USUAL_UNIT = "person-years"
+"""The unit of person-time that stands in its field until another one is typed."""
+
 Cells = dict[str, str]
 
 UNPAIRED: dict[Design, Design] = {"matched": "case-control", "paired": "trial", "before-after": "cohort"}
@@ -44,14 +47,19 @@ def in_form(outcome: Outcome, form: Form) -> Outcome:
     A row whose two counts are known is converted: its left cell stays as typed where it can (a blank one is filled),
     its right cell gets the number that belongs there. Any other row keeps its text, to be read in the new form. Pairs
     leave their margins; no margins give pairs back. Choosing pairs makes the design one of pairs, and leaving them
-    makes it one without.
+    makes it one without. Person-time begins in person-years, and a lone effect that is not typed yet as an odds ratio,
+    as its specimen does.
     """
     kind = FORMS[one_of(form, FORMS)]
     table = outcome.table
     if type(table) is kind:
         return outcome
     changed = replace(outcome, table=_table(table, kind), design=_design(outcome.design, form))
-    return replace(changed, counted="left") if kind is PersonTime else changed
+    if kind is PersonTime:
+        return replace(changed, counted="left")
+    if kind is EffectOnly and not outcome.paper_text.strip() and outcome.paper_measure == "risk_ratio":
+        return replace(changed, paper_measure="odds_ratio")
+    return changed
 
 
 def _design(design: Design, form: Form) -> Design:
@@ -67,6 +75,8 @@ def _table(table: Table, kind: type[Table]) -> Table:
         of_total = not isinstance(table, EventsAndOthers | Pairs)
         cells = _cells(table, EventsOfTotal if of_total else EventsAndOthers)
         return Strata(strata=(Stratum(**cells), Stratum()), of_total=of_total)
+    if issubclass(kind, PersonTime):
+        return PersonTime(**_cells(table, kind), unit_text=USUAL_UNIT)
     return kind(**_cells(table, kind))
 
 

@@ -7,7 +7,7 @@ from typing import TypeVar
 
 from msgspec.structs import fields, replace
 
-from fourcount.record.outcome import CELLS, EffectOnly, Outcome, Patient, Strata, Stratum
+from fourcount.record.outcome import CELLS, PAPER_MEASURES, EffectOnly, Outcome, Patient, Strata, Stratum
 from fourcount.record.paper import Record
 
 Word = TypeVar("Word", bound=str)
@@ -15,6 +15,9 @@ Word = TypeVar("Word", bound=str)
 STRATUM_TEXTS = frozenset((*CELLS, "label_text"))
 OWN_TEXTS = frozenset(("unit_text", "limits_level_text"))
 """Texts that only one form of print has."""
+
+MEASURES_OF = {"paper_text": "paper_measure", "adjusted_text": "adjusted_measure"}
+"""What each printed effect is called."""
 
 
 def _texts(kind: type[Outcome] | type[Patient] | type[Record]) -> frozenset[str]:
@@ -29,7 +32,8 @@ RECORD_TEXTS = _texts(Record)
 def edit_text(outcome: Outcome, field: str, text: str) -> Outcome:
     """Write into one of the outcome's text fields, a text of its table or a field of its patient.
 
-    A stratum's field is named with its place, counted from 0: ``strata.2.first_left_text``.
+    A stratum's field is named with its place, counted from 0: ``strata.2.first_left_text``. A printed effect that
+    names its measure ("OR 0.49") settles what it is called, and it is called so when the name is edited away.
     """
     text = storable(text)
     if field in CELLS or field in OWN_TEXTS:
@@ -38,7 +42,8 @@ def edit_text(outcome: Outcome, field: str, text: str) -> Outcome:
         return _edit_stratum(outcome, field, text)
     if field in PATIENT_TEXTS:
         return replace(outcome, patient=replace(outcome.patient, **{field: text}))
-    return replace(outcome, **{one_of(field, OUTCOME_TEXTS): text})
+    edited = replace(outcome, **{one_of(field, OUTCOME_TEXTS): text})
+    return _called_by_name(edited, field, text) if field in MEASURES_OF else edited
 
 
 def edit_record_text(record: Record, field: str, text: str) -> Record:
@@ -80,3 +85,15 @@ def _edit_stratum(outcome: Outcome, field: str, text: str) -> Outcome:
     place = places[one_of(place_text, places)]
     edited = replace(strata[place], **{one_of(name, STRATUM_TEXTS): text})
     return replace(outcome, table=replace(outcome.table, strata=(*strata[:place], edited, *strata[place + 1 :])))
+
+
+def _called_by_name(outcome: Outcome, field: str, text: str) -> Outcome:
+    """The outcome with the first measure that a printed effect names, where it is one that can be chosen."""
+    from fourcount.record.entry.figure_grammar import Grammar  # the window starts without the readers
+    from fourcount.record.entry.tokens import LONGEST_TEXT, take_apart
+
+    if len(text) > LONGEST_TEXT:
+        return outcome
+    names = (figure.name for figure in Grammar(take_apart(text).tokens, unnamed=False).figures())
+    named = next((name.measure for name in names if name and name.measure in PAPER_MEASURES), None)
+    return replace(outcome, **{MEASURES_OF[field]: named}) if named else outcome
