@@ -121,7 +121,7 @@ def test_a_library_in_the_middle_of_its_import_is_not_loaded(tmp_path, monkeypat
 LIGHT = """
 import sys
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.every import every_method
+from fourcount.appraisal.every import every_interval
 from fourcount.record.outcome import EventsAndOthers, Outcome, Patient
 from fourcount.record.paper import Choices
 table = EventsAndOthers(first_left_text="38", first_right_text="374", second_left_text="70", second_right_text="339")

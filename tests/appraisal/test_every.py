@@ -5,7 +5,7 @@ from __future__ import annotations
 import pytest
 
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.every import conditional_odds_ratio, every_interval, every_method, every_p, every_test
+from fourcount.appraisal.every import conditional_odds_ratio, every_interval, every_p
 from fourcount.appraisal.findings import PAIR_MEASURES, POOLED_MEASURES, RATE_MEASURES, Counts, Gap, Interval
 from fourcount.record.outcome import (
     CELLS,
@@ -22,48 +22,55 @@ from fourcount.record.outcome import (
 from fourcount.record.paper import Choices
 from fourcount.stats.methods import FAMILIES, METHODS, PAIR_TESTS, RATE_TESTS, STRATA_TESTS, TESTS
 
+CELLS_OF_COUNTS = (38, 374, 70, 339)
 COUNTS = Counts(index_events=38, index_non_events=374, reference_events=70, reference_non_events=339)
 MEASURES = ["risk_index", "risk_reference", "risk_difference", "risk_ratio", "odds_ratio"]
 
 
+def intervals_and_tests(outcome):
+    """Every interval and every p of an outcome."""
+    findings = appraise(outcome, Choices())
+    return every_interval(outcome, findings, 0.95), every_p(outcome, findings)
+
+
 @pytest.mark.parametrize("design", DESIGNS)
-def test_every_measure_has_every_method_in_every_design(design):
+def test_every_measure_has_every_method_in_every_design(study, design):
     """No method is ever missing: a withheld one is a gap in its place."""
-    every = every_method(COUNTS, design, 0.95)
+    every, _tests = intervals_and_tests(study(*CELLS_OF_COUNTS, design=design))
     assert list(every) == MEASURES
     for measure, intervals in every.items():
         kind = "risk" if measure.startswith("risk_") and measure[5:] in ("index", "reference") else measure
         assert [method.key for method in METHODS if method.measure == kind] == list(intervals)
 
 
-def test_a_trial_has_an_interval_by_every_method():
+def test_a_trial_has_an_interval_by_every_method(study):
     """With four counts above 0 nothing is withheld."""
-    every = every_method(COUNTS, "trial", 0.95)
+    every, _tests = intervals_and_tests(study(*CELLS_OF_COUNTS))
     assert all(isinstance(interval, Interval) for intervals in every.values() for interval in intervals.values())
 
 
-def test_a_case_control_study_has_methods_for_the_odds_ratio_only():
+def test_a_case_control_study_has_methods_for_the_odds_ratio_only(study):
     """What the design withholds is withheld by every method."""
-    every = every_method(COUNTS, "case-control", 0.95)
+    every, _tests = intervals_and_tests(study(*CELLS_OF_COUNTS, design="case-control"))
     assert all(isinstance(interval, Interval) for interval in every.pop("odds_ratio").values())
     assert all(gap == Gap("design-case-control") for intervals in every.values() for gap in intervals.values())
 
 
 @pytest.mark.parametrize("family", ["score", "textbook", "exact"])
-def test_the_familys_own_methods_are_among_them(appraised, family):
+def test_the_familys_own_methods_are_among_them(appraised, study, family):
     """The interval on screen is the one that the list gives under its key."""
-    findings = appraised(38, 374, 70, 339, family=family)
-    every = every_method(COUNTS, "trial", 0.95)
+    findings = appraised(*CELLS_OF_COUNTS, family=family)
+    every, tests = intervals_and_tests(study(*CELLS_OF_COUNTS))
     for measure in MEASURES:
         figure = findings.measures[measure]
         assert every[measure][figure.method] == figure.interval
     assert FAMILIES[family].test == findings.test.method
-    assert every_test(COUNTS)[findings.test.method] == findings.test.p
+    assert tests[findings.test.method] == findings.test.p
 
 
-def test_every_test_has_a_p():
+def test_every_test_has_a_p(study):
     """The four tests of no association, in the order of their table."""
-    tests = every_test(COUNTS)
+    _every, tests = intervals_and_tests(study(*CELLS_OF_COUNTS))
     assert [test.key for test in TESTS] == list(tests)
     assert all(0 < p < 0.01 for p in tests.values())
 

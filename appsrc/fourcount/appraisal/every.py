@@ -18,14 +18,13 @@ from fourcount.appraisal.findings import (
     TimedRisks,
 )
 from fourcount.appraisal.gating import (
-    SUPPORT,
     Withheld,
     support_of,
     withheld_of_pairs,
     withheld_of_rates,
     withheld_of_timed,
 )
-from fourcount.record.outcome import Design, Outcome
+from fourcount.record.outcome import Outcome
 from fourcount.stats import pairs as pair_counts
 from fourcount.stats.entries.entry import Method, Test
 from fourcount.stats.methods import (
@@ -87,16 +86,6 @@ def every_p(outcome: Outcome, findings: OutcomeFindings) -> dict[str, float | Ga
     if pairs is not None:
         return _every_test(PAIR_TESTS, pairs, clusters.elsewhere)
     return _every_test(RATE_TESTS, given, clusters.elsewhere) if isinstance(given, Rates) else {}
-
-
-def every_method(counts: Counts, design: Design, level: float) -> dict[str, Intervals]:
-    """The same of four counts alone, of people whom nothing is known of but their design."""
-    return _every(METHODS, _of_counts(counts), SUPPORT[design].withheld, level, None)
-
-
-def every_test(counts: Counts) -> dict[str, float | Gap]:
-    """The two-sided p of each test of no association, by the test's key."""
-    return _every_test(TESTS, counts, None)
 
 
 def conditional_odds_ratio(counts: Counts) -> float | Gap:
