@@ -66,7 +66,7 @@ def test_an_e_value_says_whose_it_is_and_what_it_is_not():
 
 def test_a_converted_ratio_is_said_to_be():
     """An odds ratio of a common event is turned into a risk ratio first."""
-    values = EValues(estimate=2.0, limit=1.5, converted="odds_ratio", measure="odds_ratio", adjusted=True)
+    values = EValues(ratio=4 / 3, estimate=2.0, limit=1.5, converted="odds_ratio", measure="odds_ratio", adjusted=True)
     line = with_extras(Extras(e_value=values))["e_value"]
     assert line.detail == "of the printed, adjusted odds ratio"
     assert line.note.endswith("turned into a risk ratio first, by its square root.")

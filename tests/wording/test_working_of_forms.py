@@ -167,7 +167,18 @@ def test_every_extra_has_a_working():
     }
     assert dict(found["clusters"].rows)["Design effect"] == "1 + (21 − 1) × 0.02 = 1.4000"
     assert dict(found["losses.worst"].rows)["Lost, index group"] == "20"
+    assert dict(found["losses.worst"].rows)["Risk, index group"] == "58/432 = 0.1343"
+    assert dict(found["losses.best"].rows)["Risk, reference group"] == "80/419 = 0.1909"
     assert "Akl" in dict(found["losses.worst"].rows)["Source"]
+
+
+def test_an_e_value_is_worked_out_from_its_ratio():
+    """A ratio below 1 is turned over first; of a common event, an odds ratio's root is what the formula takes."""
+    rows = rows_of("e_value", of_total(design="cohort"))
+    assert rows["E-value"] == "1/0.5389 = 1.8556; 1.8556 + √(1.8556 × 0.8556) = 3.1157"
+    common = of_total((200, 412, 100, 409), design="cohort", adjusted_text="4.00 (2.90 to 5.50)")
+    converted = rows_of("e_value", common)
+    assert (converted["E-value"], converted["Converted first"]) == ("2.0000 + √(2.0000 × 1.0000) = 3.4142", "√OR")
 
 
 def test_a_line_that_is_not_there_has_an_empty_working():

@@ -22,10 +22,13 @@ def e_values(ratio: Figure | Gap, measure: str, *, common: bool, adjusted: bool 
         return ratio.estimate
     convert = _CONVERSIONS.get(measure) if common else None
     estimate = ratio.estimate if convert is None else convert(ratio.estimate)
-    of_estimate = estimate if isinstance(estimate, Gap) else e_value(estimate)
+    if isinstance(estimate, Gap):
+        return estimate
+    of_estimate = e_value(estimate)
     if isinstance(of_estimate, Gap):
         return of_estimate
     return EValues(
+        ratio=estimate,
         estimate=of_estimate,
         limit=_of_limit(ratio, measure, common=common),
         converted=measure if convert is not None else "",

@@ -15,9 +15,11 @@ class EValues(msgspec.Struct, frozen=True, kw_only=True):
     """The E-value of the estimate and of the limit nearest no effect.
 
     ``measure`` is the ratio that it is of, ``adjusted`` whether that is the printed adjusted one. ``converted`` is
-    "odds_ratio" or "hazard_ratio" where such a ratio of a common outcome was turned into a risk ratio first.
+    "odds_ratio" or "hazard_ratio" where such a ratio of a common outcome was turned into a risk ratio first; ``ratio``
+    is what the formula took.
     """
 
+    ratio: float
     estimate: float
     limit: float | Gap
     converted: str = ""

@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+from math import isinf
+
 from fourcount.appraisal.findings import (
     Clusters,
     Counts,
@@ -55,6 +57,7 @@ def extra_rows(key: str, findings: OutcomeFindings, _choices: Choices) -> tuple[
     name = key.partition(".")[0]
     entry = CALCULATIONS.get(ENTRIES.get(name, ""))
     rows = _fraction(name, findings) if name in FRACTIONS else _numbers(name, findings)
+    rows += _put_back(key, findings)
     rows += [] if entry is None else about(entry)
     return (*rows, *(_levin(findings) if name == "attributable_population" else ()))
 
@@ -122,6 +125,35 @@ def _levin(findings: OutcomeFindings) -> list[Row]:
     return [SPACE, ("", OTHER_METHODS), (CALCULATIONS["attributable-levin"].title, words)]
 
 
+def _e_value(found: EValues) -> str:
+    """``1.86 + √(1.86 × 0.86) = 3.12``, a ratio below 1 turned over first; nothing is to be worked out at the ends."""
+    if found.ratio == 0 or isinf(found.ratio):
+        return plain(found.estimate)
+    r = max(found.ratio, 1 / found.ratio)
+    turned = f"1/{plain(found.ratio)} = {plain(r)}; " if found.ratio < 1 else ""
+    return f"{turned}{plain(r)} + √({plain(r)} × {plain(r - 1)}) = {plain(found.estimate)}"
+
+
+def _put_back(key: str, findings: OutcomeFindings) -> list[Row]:
+    """Both groups' risks in one scenario of those lost: events and people, the lost among them."""
+    losses, counts = findings.extras.losses, findings.counts
+    if not isinstance(losses, Losses) or isinstance(counts, Gap):
+        return []
+    scenario = next((one for one in losses.scenarios if key == f"losses.{one.key}"), None)
+    if scenario is None:
+        return []
+    reference, index = counts.reference_total + losses.reference_lost, counts.index_total + losses.index_lost
+    return [
+        ("Risk, reference group", _share(scenario.risk_reference, reference)),
+        ("Risk, index group", _share(scenario.risk_index, index)),
+    ]
+
+
+def _share(risk: float, people: int) -> str:
+    """``58/432 = 0.1343``; a share of the people lost need not be whole people."""
+    return f"{quantity(round(risk * people, 2))}/{whole(people)} = {plain(risk)}"
+
+
 def _ratio(findings: OutcomeFindings) -> Figure | None:
     found = measure_of(RATIOS.get(findings.form, "risk_ratio"), findings)
     return found if isinstance(found, Figure) else None
@@ -135,7 +167,7 @@ def _numbers(name: str, findings: OutcomeFindings) -> list[Row]:
         return [("Design effect", formula)]
     if name == "e_value" and isinstance(extras.e_value, EValues):
         limit = extras.e_value.limit
-        rows = [("E-value", plain(extras.e_value.estimate))]
+        rows = [("E-value", _e_value(extras.e_value))]
         rows += [] if isinstance(limit, Gap) else [("Of the limit nearest no effect", plain(limit))]
         conversion = CALCULATIONS.get(CONVERSIONS.get(extras.e_value.converted, ""))
         return [*rows, *([] if conversion is None else [("Converted first", conversion.formula)])]
