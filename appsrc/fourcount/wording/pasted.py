@@ -35,6 +35,7 @@ DOUBTS = {
     "comma-pairs": "A comma was taken as a border between two counts.",
     "point-thousands": "Points in whole numbers were taken as marks of thousands.",
     "totals-disagree": "A total is not the sum of its counts.",
+    "counts-left-out": "The counts in it were not understood; only the printed result was taken.",
     "not-compared": "Nothing says that the two counts are of two groups.",
     "changed-count": "The counts may be of one group at two times.",
 }

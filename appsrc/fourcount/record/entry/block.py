@@ -74,7 +74,12 @@ def _understood(matrix: Matrix, text: str) -> Pasted | None:
     if not layouts:
         return None
     best, layout = max(layouts, key=lambda found: found[0].score)
-    undecided = down and across and down.score == across.score and _counts(down) != _counts(across)
+    unnamed = not (all(label.label for label in matrix.labels) and all(head.label for head in matrix.heads))
+    summed = any(is_sum(head.label) for head in (*matrix.labels, *matrix.heads)) and unnamed
+    differ = down and across and _counts(down) != _counts(across)
+    undecided = (
+        down and across and differ and (down.score == across.score or (summed and best.form == "events-and-others"))
+    )
     doubts = (*best.doubts, *(("orientation",) if undecided else ()))
     return _table(best, doubts, layout)
 
@@ -142,7 +147,7 @@ def _strata(found: Strata) -> Pasted:
         form="strata",
         groups=tuple(group for table in tables for group in _groups(table)),
         stratum_labels=found.labels[:_MOST_STRATA],
-        ambiguous=found.doubts,
+        ambiguous=(*found.doubts, "left-out") if len(found.tables) > _MOST_STRATA else found.doubts,
         strata_of_total=tables[0].form != "events-and-others",
         layout="across",
     )

@@ -82,5 +82,7 @@ def statistic_at(tokens: Sequence[Token], place: int) -> int:
     step = place + 1
     if [token.text for token in tokens[step : step + 1]] == ["("]:
         step += 3
+    if step < len(tokens) and tokens[place].lower in _STATISTICS[:6] and tokens[step].kind == "number":
+        return step + 1
     following = tokens[step : step + 2]
     return step + 2 if len(following) == 2 and following[0].text == "=" and following[1].kind == "number" else 0

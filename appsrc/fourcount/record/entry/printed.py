@@ -22,6 +22,8 @@ PAPER_MARKS = (
     "paper-too-long",  # more text than is read
 )
 _LOWEST_LEVEL = 0.5
+_BEYOND_ONE = 1.2
+"""Up to here limits of a difference of fractions reach, as some methods let them pass one."""
 
 
 def read_paper(text: str, measure: PaperMeasure, field: str = "paper_text") -> PaperReading:
@@ -88,7 +90,9 @@ def _unit(figure: Figure, called: str) -> PrintedUnit:
     if figure.unit != "one" or called == "rate_difference":
         return figure.unit
     values = [abs(number.value) for number in (figure.estimate, figure.low, figure.high) if number]
-    return "percent" if any(value > 1 for value in values) else "one"
+    estimate = figure.estimate
+    fraction = estimate is not None and abs(estimate.value) <= 1 and estimate.decimals > 1
+    return "percent" if max(values, default=0) > (_BEYOND_ONE if fraction else 1) else "one"
 
 
 def _doubts(figure: Figure, printed: Print, field: str) -> Sequence[Mark]:

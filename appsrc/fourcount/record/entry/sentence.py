@@ -15,7 +15,15 @@ from fourcount.record.entry.pasted.pair_words import pair_sentence
 from fourcount.record.entry.pasted.proportions import beside, gives
 from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity
 from fourcount.record.entry.pasted.totals import leads_clause, shared_total, with_totals, without_sums
-from fourcount.record.entry.pasted.vocabulary import COMPARATORS, GROUP_NOUNS, INTRODUCERS, LINKING, NOT_PEOPLE, PEOPLE
+from fourcount.record.entry.pasted.vocabulary import (
+    COMPARATORS,
+    EVENT_NOUNS,
+    GROUP_NOUNS,
+    INTRODUCERS,
+    LINKING,
+    NOT_PEOPLE,
+    PEOPLE,
+)
 from fourcount.record.entry.printed import named_figures
 from fourcount.record.entry.readings import Pasted, PastedGroup
 from fourcount.record.entry.tokens import LONGEST_TEXT, Print, Token, as_sentence, take_apart
@@ -43,7 +51,7 @@ def read_sentence(text: str) -> Pasted | None:
     numbers = sum(token.kind == "number" for token in printed.tokens)
     if len(printed.tokens) > _MOST_TOKENS or not 1 < numbers <= _MOST_NUMBERS:
         return None
-    return pair_sentence(printed) or SentenceReader(printed).read()
+    return SentenceReader(printed).read()
 
 
 class SentenceReader:
@@ -60,6 +68,9 @@ class SentenceReader:
 
     def read(self) -> Pasted | None:
         """The first two quantities that make a table, else results alone, else None."""
+        pairs = pair_sentence([token for place, token in enumerate(self.tokens) if place not in self.busy])
+        if pairs:
+            return msgspec.structs.replace(pairs, figures=self.figures, paper_text=self._paper_text())
         for bare in (False, True):
             found = self._quantities(bare=bare)
             quantities = without_sums(found)
@@ -272,7 +283,22 @@ class SentenceReader:
         effects = tuple(figure for figure in self.figures if figure.measure in _EFFECTS and figure.low and figure.high)
         if not effects:
             return None
-        return Pasted(form="effect-only", figures=self.figures, paper_text=self._paper_text(), source="sentence")
+        doubts = ("counts-left-out",) if self._holds_counts() else ()
+        return Pasted(
+            form="effect-only",
+            figures=self.figures,
+            paper_text=self._paper_text(),
+            ambiguous=doubts,
+            source="sentence",
+        )
+
+    def _holds_counts(self) -> bool:
+        """Whether a number of people or events stands there that no table was made of."""
+        if any(each.events for each in self._quantities(bare=False)):
+            return True
+        counts = [place for place, token in enumerate(self.tokens) if token.whole and place not in self.busy]
+        behind = [{token.lower for token in self.tokens[place + 1 : place + 3]} for place in counts]
+        return any(words & (PEOPLE | EVENT_NOUNS) for words in behind)
 
     def _paper_text(self) -> str:
         """The printed results in one piece, or joined by "; " where other words stand between them."""

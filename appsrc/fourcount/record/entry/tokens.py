@@ -15,7 +15,7 @@ import msgspec
 
 from fourcount.record.entry.digits import alike_in_ascii
 from fourcount.record.entry.number_words import UNITS, spelled_number
-from fourcount.record.entry.word_list import words
+from fourcount.record.entry.word_list import EVENT_NOUNS, words
 
 Kind = Literal["number", "word", "mark", "break"]
 
@@ -28,12 +28,10 @@ _RAISED = dict.fromkeys(map(ord, "\u2219\u2022\u2027\u22c5\u30fb"), "\u00b7")
 _UNSEEN = re.compile("[\u00ad\u061c\u200b-\u200f\u202a-\u202e\u2060-\u206f\ufeff]+")
 _CONTROLS = re.compile("[\x00-\x08\x0e-\x1f\x7f-\x84\x86-\x9f\ud800-\udfff]")
 _BREAKS = re.compile("\r\n|[\r\v\f\x85\u2028\u2029]")
-_COUNTED = frozenset(
+_ONES = frozenset(
     words(
-        "death deaths event events infection infections fall falls case cases stroke strokes relapse relapses "
-        "recurrence recurrences fracture fractures complication complications bleed bleeds bleeding patient patients "
-        "participant participants child children woman women man men person one infant infants adult adults resident "
-        "residents failure failures reaction reactions"
+        "patient patients participant participants child children woman women man men person one infant infants adult "
+        "adults resident residents"
     )
 )
 _NO_BREAK = "\ue000"
@@ -196,7 +194,7 @@ def _number(match: re.Match[str], text: str, found: list[Token]) -> tuple[Token,
 def _none_of(tokens: list[Token], place: int) -> bool:
     """Whether "no" counts people or events: "No deaths occurred among 120 patients", not "no difference in 412"."""
     behind = tokens[place + 1 : place + 8]
-    if not behind or behind[0].lower not in _COUNTED:
+    if not behind or behind[0].lower not in EVENT_NOUNS | _ONES:
         return False
     link = next((step for step, token in enumerate(behind) if token.lower in ("among", "in", "of")), len(behind))
     follows = [token for token in behind[link + 1 :] if token.lower != "the"][:1]

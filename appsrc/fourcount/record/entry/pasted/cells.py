@@ -290,11 +290,11 @@ def _result(printed: Print, phrases: Phrases, place: int) -> tuple[Cell, int] | 
         text = printed.piece(place, place + 3)
         return Cell(text=text, result=text, limits=True), place + 3
     limits = opened and low.kind == high.kind == "number" and between.lower in ("to", "-", ",", ";")
-    if not limits or (token.whole is not None and not (low.decimals or high.decimals)):
+    risk = 0 <= low.value <= token.value <= high.value <= 100
+    if not limits or (token.whole is not None and not (low.decimals or high.decimals or risk)):
         return None
     after = at + 3 + (phrases.at(at + 3).text in CLOSING)
     text = printed.piece(place, after)
-    risk = 0 <= low.value <= token.value <= high.value <= 100
     quantity = Quantity(first=place, after=after, percent=token, low=low, high=high) if risk else None
     return Cell(text=text, result=text, risk=quantity), after
 

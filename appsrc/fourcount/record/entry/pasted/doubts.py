@@ -18,6 +18,7 @@ PASTE_DOUBTS = (
     "comma-pairs",  # a comma was taken as a border between two counts, not as a thousands mark
     "point-thousands",  # points in whole numbers were taken as thousands marks, beside decimal commas
     "totals-disagree",  # a total is not the sum of its counts
+    "counts-left-out",  # counts were not understood: only the printed result was taken
     "not-compared",  # nothing says that the two counts are of two groups
     "changed-count",  # a rise or a fall: the counts may be those of one group at two times
 )

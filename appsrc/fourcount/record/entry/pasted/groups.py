@@ -7,8 +7,9 @@ from collections.abc import Callable, Sequence
 import msgspec
 
 from fourcount.record.entry.pasted.heading_sets import by_case, corner_says, negated, roles_of
-from fourcount.record.entry.pasted.headings import Role, heading_words, is_sum, role_of, time_unit
+from fourcount.record.entry.pasted.headings import Role, is_sum, role_of, time_unit
 from fourcount.record.entry.pasted.matrix import Matrix
+from fourcount.record.entry.pasted.percentages import percentages
 from fourcount.record.entry.pasted.proportions import gives, nearly_gives
 from fourcount.record.entry.pasted.proven import proven_total
 from fourcount.record.entry.pasted.quantities import Quantity
@@ -39,7 +40,8 @@ def two_groups(matrix: Matrix) -> Understood | None:
     score -= 3 * any(head.total for head in matrix.heads)
     sampled = by_case(matrix.heads)
     score += 6 * sampled - 6 * by_case(matrix.labels) + 2 * corner_says(matrix.corner)
-    found = _complete(matrix) or _counted(matrix, roles) or _percentages(matrix, roles)
+    score -= 6 * (any(is_sum(head.label) for head in matrix.heads) and not any(label.label for label in matrix.labels))
+    found = _complete(matrix) or _counted(matrix, roles) or percentages(matrix, roles)
     if found is None:
         return None
     pair = found.quantities
@@ -232,6 +234,8 @@ def _by_roles(matrix: Matrix, columns: Sequence[int], roles: Sequence[Role]) -> 
         return _two_outcomes(matrix, named[0], others[0], score=4, doubts=doubts)
     if not named or not totals:
         return None
+    several = len({tuple(token.whole for token in _tokens(matrix, place) if token) for place in totals}) > 1
+    totals = totals[-1:] if several else totals
     pair = _with_totals(matrix, named[0], _tokens(matrix, totals[0]))
     if pair is None:
         return None
@@ -243,7 +247,7 @@ def _by_roles(matrix: Matrix, columns: Sequence[int], roles: Sequence[Role]) -> 
         quantities=pair,
         labels=("", ""),
         left_heading=matrix.heads[named[0]].label,
-        doubts=("several-rows",) if len(named) > 1 and len(events) != 1 else (),
+        doubts=(("several-rows",) if len(named) > 1 and len(events) != 1 else ()) + (("left-out",) if several else ()),
         score=4,
     )
 
@@ -303,39 +307,3 @@ def _percent_fits(
         if part > whole and not together:
             return False
     return True
-
-
-def _nested(matrix: Matrix, column: int, totals: Sequence[Token | None]) -> bool:
-    """Whether one row is all people and the other row a part of them ("100%" and "9.2%")."""
-    for whole, part in ((0, 1), (1, 0)):
-        hundred, percent = matrix.rows[whole][column].percent, matrix.rows[part][column].percent
-        all_of, some = totals[whole], totals[part]
-        if hundred and percent and all_of and some and hundred.value == 100 and percent.value < 100:
-            return gives(percent, some.whole or 0, all_of.whole or 0)
-    return False
-
-
-def _percentages(matrix: Matrix, roles: Sequence[Role]) -> Understood | None:
-    """Percentages of totals that stand in another column or beside the labels."""
-    percents = [place for place in range(len(matrix.heads)) if all(row[place].percent for row in matrix.rows)]
-    if not percents:
-        return None
-    totals: list[Token | None] = [label.total for label in matrix.labels]
-    if not all(totals):
-        counts = [place for place in range(len(matrix.heads)) if all(row[place].count for row in matrix.rows)]
-        totals = _tokens(matrix, counts[0]) if counts and roles[counts[0]] in ("total", "unknown") else []
-    if len(totals) != 2 or not all(totals) or _nested(matrix, percents[0], totals):
-        return None
-    pair = [
-        Quantity(first=0, after=1, percent=row[percents[0]].percent, total=total)
-        for row, total in zip(matrix.rows, totals, strict=True)
-    ]
-    heading = matrix.heads[percents[0]].label
-    return Understood(
-        form="percent-of-total",
-        quantities=(pair[0], pair[1]),
-        labels=("", ""),
-        left_heading="" if set(heading_words(heading)) <= {"%", "percent", "percentage"} else heading,
-        doubts=("several-rows",) if len(percents) > 1 else (),
-        score=2,
-    )

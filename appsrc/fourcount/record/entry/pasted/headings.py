@@ -14,7 +14,10 @@ Role = Literal["events", "total", "others", "percent", "time", "rate", "result",
 
 _WORD = re.compile(r"[^\W_]+(?:['-][^\W_]+)*|[%+\u2713]|(?<!\w)-(?!\w)")
 _NUMBER_SHORT = re.compile(r"\b[Nn]os?\.")
-_MEASURED = re.compile(r"\b(mean|median|average|sd|iqr|scores?|bmi)\b|^age$", re.IGNORECASE)
+_MEASURED = re.compile(
+    r"\b(mean|median|average|sd|iqr|scores?|bmi|systolic|diastolic|pulse|ph|pco2|po2|temperature)\b|^age$",
+    re.IGNORECASE,
+)
 _UNIT_BEHIND = re.compile(
     r"(?:[,(\[] ?| [-\u2013] )(years?|yrs?|months?|weeks?|days?|hours?|h|minutes?|min|kg|g|cm|mm|mm ?hg|kg/m.*|mg.*"
     r"|mmol.*|points?|units?|litres?|ml)[)\]]?$",
@@ -23,6 +26,7 @@ _UNIT_BEHIND = re.compile(
 _TIME = re.compile(
     r"(at |after |before |by )?(baseline|follow-up|before|after|first visit|second visit|start|end"
     r"|(week|month|day|year|visit|hour)s? [0-9]+|[0-9]+ ?(weeks?|months?|days?|years?|hours?))( of .*)?"
+    r"|january|february|march|april|may|june|july|august|september|october|november|december"
     r"|(pre|post)-?(test|treatment|intervention|op|operative)?|(before|after) .*",
     re.IGNORECASE,
 )

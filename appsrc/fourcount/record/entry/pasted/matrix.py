@@ -93,6 +93,8 @@ def _without_result_lines(rows: Sequence[Sequence[Cell]]) -> tuple[tuple[str, ..
         if not filled or not (all(cell.result for cell in filled) or _is_one_result(label, filled)):
             kept.append(row)
             continue
+        if len(filled) > 1 and label and role_of(label) not in ("result", "p", "percent"):
+            continue
         above = kept[-1][0].label if kept and len(kept[-1]) == 1 else ""
         if not label and role_of(above) == "result" and kept[-1][0].empty is False:
             label = above

@@ -301,7 +301,7 @@ class Phrases:
         following = self.at(after)
         said = inside.percent and not self._level(place + step)
         unsaid = following.text in CLOSING and (
-            self.bare if total is None else bool(inside.decimals) and self._gives(inside, events, total)
+            self.bare if total is None else bool(inside.decimals or self.bare) and self._gives(inside, events, total)
         )
         if not (said or unsaid):
             return None, back

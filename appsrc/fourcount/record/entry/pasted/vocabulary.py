@@ -2,7 +2,9 @@
 
 from __future__ import annotations
 
-from fourcount.record.entry.word_list import words
+from fourcount.record.entry.word_list import EVENT_NOUNS, words
+
+__all__ = ["EVENT_NOUNS"]
 
 PEOPLE = frozenset(
     words(
