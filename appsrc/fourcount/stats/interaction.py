@@ -36,43 +36,28 @@ class Interaction:
 
 def ratio_of_ratios(first: Estimate, second: Estimate, level_of_both: float) -> Interaction | Gap:
     """The ratio of two independent ratios, its interval at the same level, and the p of no difference."""
-    apart = _apart(first, second, level_of_both, log_scale=True)
-    if isinstance(apart, Gap):
-        return apart
-    distance, error, reach = apart
-    return Interaction(
-        estimate=first[0] / second[0],
-        low=exponential(distance - reach),
-        high=exponential(distance + reach),
-        z=distance / error,
-        p=two_sided_p(distance / error),
-        standard_error=error,
-    )
+    return _set_against(first, second, level_of_both, log_scale=True)
 
 
 def difference_of_differences(first: Estimate, second: Estimate, level_of_both: float) -> Interaction | Gap:
     """The same of two independent differences, on their own scale."""
-    apart = _apart(first, second, level_of_both, log_scale=False)
-    if isinstance(apart, Gap):
-        return apart
-    distance, error, reach = apart
-    return Interaction(
-        estimate=distance,
-        low=distance - reach,
-        high=distance + reach,
-        z=distance / error,
-        p=two_sided_p(distance / error),
-        standard_error=error,
-    )
+    return _set_against(first, second, level_of_both, log_scale=False)
 
 
-def _apart(first: Estimate, second: Estimate, level: float, *, log_scale: bool) -> tuple[float, float, float] | Gap:
-    """How far the two are apart, the standard error of that, and how far its interval reaches."""
+def _set_against(first: Estimate, second: Estimate, level: float, *, log_scale: bool) -> Interaction | Gap:
     one, two = (from_limits(*estimate, level, log_scale=log_scale) for estimate in (first, second))
     if isinstance(one, Gap):
         return one
     if isinstance(two, Gap):
         return two
     error = math.hypot(one.standard_error, two.standard_error)
-    distance = math.log(first[0]) - math.log(second[0]) if log_scale else first[0] - second[0]
-    return distance, error, quantile(level) * error
+    apart = math.log(first[0]) - math.log(second[0]) if log_scale else first[0] - second[0]
+    low, high = apart - quantile(level) * error, apart + quantile(level) * error
+    return Interaction(
+        estimate=first[0] / second[0] if log_scale else apart,
+        low=exponential(low) if log_scale else low,
+        high=exponential(high) if log_scale else high,
+        z=apart / error,
+        p=two_sided_p(apart / error),
+        standard_error=error,
+    )
