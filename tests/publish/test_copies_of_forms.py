@@ -20,6 +20,7 @@ from fourcount.record.paper import FAMILIES, Choices
 from fourcount.wording.cautions import STANDING, STANDING_FULL, caution_text
 from fourcount.wording.exports import SHEET_HEAD
 
+NAMES = ("first_label_text", "second_label_text", "left_words_text", "right_words_text")
 RAW = re.compile(r"\bnan\b|None|\binf\b|Gap\(|Interval\(|-0\.0|\de[+-]\d\d")
 BESIDE = {
     "first_lost_text": "20",
@@ -49,6 +50,14 @@ def test_every_copy_of_every_form_carries_its_cautions(name: str) -> None:
                 "Pairs, fell at least once: 30 on both sides, 20 only with night lights, 40 only with usual care, 110 "
                 "on neither."
             ),
+        ),
+        (
+            paired("before-after", (14, 5, 2, 22), first_label_text="", second_label_text="", left_words_text="fell"),
+            "People, fell: 14 both times, 5 only after, 2 only before, 22 at neither time.",
+        ),
+        (
+            paired("matched", (27, 29, 3, 44), **dict.fromkeys(NAMES, "")),
+            "Pairs, was exposed: 27 on both sides, 29 only the case, 3 only the control, 44 on neither.",
         ),
         (
             paired("paired", ("", 20, 40, "")),
@@ -164,7 +173,7 @@ def test_a_sheet_holds_unrounded_numbers(outcome, name, estimate) -> None:
     [
         (
             paired(),
-            {"Pairs, fell at least once: both sides": "30", "Pairs, fell at least once: only with usual care": "40"},
+            {"Pairs, fell at least once: on both sides": "30", "Pairs, fell at least once: only with usual care": "40"},
         ),
         (
             person_time(),

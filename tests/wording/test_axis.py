@@ -13,8 +13,8 @@ from fourcount.wording.axis import axis_words
     [
         ("difference", 0.15, ("15 fewer", "0", "15 more")),
         ("difference", 0.0025, ("0.25 fewer", "0", "0.25 more")),
-        ("ratio", 4.0, ("¼", "fewer | more", "4")),
-        ("ratio", 50.0, ("0.02", "fewer | more", "50")),
+        ("ratio", 4.0, ("¼", "lower | higher", "4")),
+        ("ratio", 50.0, ("0.02", "lower | higher", "50")),
         ("risk", 0.25, ("0", "", "25%")),
         ("risk", 0.001, ("0", "", "0.1%")),
     ],

@@ -14,6 +14,8 @@ from fourcount.wording.p_value import NOT_THE_SIZE
 from fourcount.wording.sentence import headline, measure_sentence, p_sentence
 
 NOT_OF_ODDS = re.compile(r"\b(risks?|chances?|probability|probable|likely|prevalences?)\b")
+UNNAMED = dict.fromkeys(("first_label_text", "second_label_text", "left_words_text", "right_words_text"), "")
+UNNAMED["span_text"] = ""
 BY_HAND = "It rests on the 60 pairs that differ: in 20 the event came only {index}, in 40 only {reference}."
 
 
@@ -57,15 +59,45 @@ def meaning(key, outcome):
         (
             paired("before-after", first_label_text="After", second_label_text="Before"),
             (
-                "Of 100 people in the period “Before” about 35 fell at least once within 12 months; of 100 in the "
-                "period “After” about 25. That is 10 fewer, and could be as few as 2 or as many as 17 (95% interval)."
+                "Of 100 people about 35 fell at least once within 12 months before and about 25 after. That is 10 "
+                "fewer, and could be as few as 2 or as many as 17 (95% interval)."
+            ),
+        ),
+        (
+            paired("before-after", (14, 5, 2, 22), **UNNAMED),
+            (
+                "Of 100 people about 37 had the event before and about 44 after. That is 7 more, and could be anything "
+                "from 6 fewer to 19 more (95% interval): compatible with fewer and with more."
+            ),
+        ),
+        (
+            paired("before-after", index_group="second", first_label_text="July", second_label_text="June"),
+            (
+                "Of 100 people in the period “July” about 25 fell at least once within 12 months; of 100 in the period "
+                "“June” about 35. That is 10 more, and could be as few as 2 or as many as 17 (95% interval)."
+            ),
+        ),
+        (
+            paired("matched", (27, 29, 3, 44), **UNNAMED),
+            (
+                "Within pairs, the odds that the case was exposed were 9.67 times those of the control (95% interval "
+                "3.27 to 39.98). It rests on the 32 pairs that differ: in 29 only the case was exposed, in 3 only the "
+                "control."
             ),
         ),
         (
             paired("matched", first_label_text="Cases", second_label_text="Controls", left_words_text="smoked"),
-            "Within pairs, the odds that the person in the group “Cases” smoked within 12 months were 0.50 times those "
-            "in the group “Controls” (95% interval 0.29 to 0.85). "
-            + BY_HAND.format(index="in the group “Cases”", reference="in the group “Controls”"),
+            (
+                "Within pairs, the odds that the case smoked within 12 months were 0.50 times those of the control "
+                "(95% interval 0.29 to 0.85). It rests on the 60 pairs that differ: in 20 only the case smoked, in 40 "
+                "only the control."
+            ),
+        ),
+        (
+            paired("matched", first_label_text="Mothers", second_label_text="Sisters", left_words_text="smoked"),
+            "Within pairs, the odds that the person in the group “Mothers” smoked within 12 months were 0.50 times "
+            "those in the group “Sisters” (95% interval 0.29 to 0.85). "
+            + BY_HAND.format(index="in the group “Mothers”", reference="in the group “Sisters”"),
         ),
         (
             person_time(design="trial"),

@@ -19,7 +19,7 @@ from fourcount.wording import exports, limits, names, numbers
 from fourcount.wording.extras import extra_lines
 from fourcount.wording.form import given, level_of, measure_of
 from fourcount.wording.lines import MeasureLine, measure_lines
-from fourcount.wording.pairs import pairs_that_differ
+from fourcount.wording.pairs import only, pairs_that_differ, who_differ
 from fourcount.wording.person_time import time_in
 from fourcount.wording.printed import adjusted_words
 
@@ -118,12 +118,17 @@ def _pairs(outcome: Outcome, findings: OutcomeFindings) -> str:
         return ""
     whole = isinstance(pairs, PairCounts)
     words = exports.PAIR_COUNTS if whole else exports.PAIRS_THAT_DIFFER
+    twice = outcome.design == "before-after"
     return words.format(
+        pairs=exports.SAME_PEOPLE if twice else exports.PAIRS,
+        differing=names.sentence_case(who_differ(outcome, sum(differ))),
+        on_both=exports.BOTH_TIMES if twice else exports.BOTH_SIDES,
+        on_neither=exports.NEITHER_TIME if twice else exports.NEITHER_SIDE,
         both=numbers.whole(pairs.both) if isinstance(pairs, PairCounts) else "",
         neither=numbers.whole(pairs.neither) if isinstance(pairs, PairCounts) else "",
         index_only=numbers.whole(differ[0]),
         reference_only=numbers.whole(differ[1]),
-        index=names.in_group(outcome, "index"),
-        reference=names.in_group(outcome, "reference"),
+        index=only(outcome, "index"),
+        reference=only(outcome, "reference"),
         event=names.event_words(outcome),
     )

@@ -7,7 +7,7 @@ from fourcount.publish.sheet_rows import Row, number_cell, text_row
 from fourcount.record.outcome import Outcome
 from fourcount.wording import exports, names
 from fourcount.wording.form import given
-from fourcount.wording.pairs import pairs_that_differ
+from fourcount.wording.pairs import only, pairs_that_differ
 from fourcount.wording.person_time import unit
 from fourcount.wording.printed import adjusted_words
 
@@ -56,11 +56,12 @@ def _rates(outcome: Outcome, rates: Rates) -> tuple[Row, ...]:
 
 def _pairs(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
     pairs, differ = given(findings), pairs_that_differ(outcome, findings)
-    index, reference = names.in_group(outcome, "index"), names.in_group(outcome, "reference")
+    index, reference = only(outcome, "index"), only(outcome, "reference")
+    twice = outcome.design == "before-after"
+    both, neither = (exports.BOTH_TIMES, exports.NEITHER_TIME) if twice else (exports.BOTH_SIDES, exports.NEITHER_SIDE)
     counts = [] if differ is None else [(f"only {index}", differ[0]), (f"only {reference}", differ[1])]
     if isinstance(pairs, PairCounts):
-        counts = [(exports.BOTH_SIDES, pairs.both), *counts, (exports.NEITHER_SIDE, pairs.neither)]
-    event = names.event_words(outcome)
-    return tuple(
-        (exports.PAIRS_WITH_EVENT.format(event=event, where=where), str(number), "", "", "") for where, number in counts
-    )
+        counts = [(both, pairs.both), *counts, (neither, pairs.neither)]
+    event, called = names.event_words(outcome), exports.SAME_PEOPLE if twice else exports.PAIRS
+    named = [(exports.PAIRS_WITH_EVENT.format(pairs=called, event=event, where=w), number) for w, number in counts]
+    return tuple((name, str(number), "", "", "") for name, number in named)

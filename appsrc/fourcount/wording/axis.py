@@ -14,7 +14,7 @@ def axis_words(kind: str, end: float) -> tuple[str, str, str]:
         reach = numbers.percent_given(end).rstrip("%")
         return f"{reach} fewer", "0", f"{reach} more"
     if kind == "ratio":
-        return RATIO_ENDS[end], "fewer | more", numbers.whole(int(end))
+        return RATIO_ENDS[end], "lower | higher", numbers.whole(int(end))
     if kind == "rate_difference":
         return f"{numbers.quantity(end)} fewer", "0", f"{numbers.quantity(end)} more"
     if kind == "rate":

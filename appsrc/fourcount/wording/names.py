@@ -5,13 +5,20 @@ from __future__ import annotations
 from typing import Literal
 
 from fourcount.record.editing import count_other_outcome
-from fourcount.record.outcome import Column, Effect, Outcome
+from fourcount.record.outcome import Column, Design, Effect, Outcome, Pairs, Position
 from fourcount.wording import event_names
 
 Group = Literal["index", "reference"]
 
 WITH_DESIGNS = ("trial", "paired")  # people had what the group is called after
 STAND_INS = {"index": "index group", "reference": "reference group"}
+SIDES: dict[Design, dict[Position, str]] = {
+    "matched": {"first": "cases", "second": "controls"},
+    "before-after": {"first": "after", "second": "before"},
+}
+"""What the sides of pairs are by their design; the grid calls them so too."""
+
+TIMES = ("before", "after", "during", "since", "at", "in", "on", "without", "with")
 EVENT_STAND_IN = "had the event"
 COLUMN_STAND_INS: dict[Column, str] = {"left": EVENT_STAND_IN, "right": "did not have the event"}
 """What an unnamed column says, whichever of the two is counted: print puts the events left (common practice)."""
@@ -33,7 +40,7 @@ def bare(text: str) -> str:
 def label(outcome: Outcome, group: Group) -> str:
     """The group's label as typed, or its stand-in."""
     text = outcome.index_label_text if group == "index" else outcome.reference_label_text
-    return bare(text) or STAND_INS[group]
+    return bare(text) or _stand_in(outcome, group)
 
 
 def label_within(outcome: Outcome, group: Group) -> str:
@@ -61,13 +68,38 @@ def labelled(outcome: Outcome, group: Group) -> bool:
 
 def in_group(outcome: Outcome, group: Group) -> str:
     """A group after "people": "with usual care" in a trial or a crossover, elsewhere a form that fits any noun."""
+    within = label_within(outcome, group)
+    if outcome.design == "before-after":
+        return within if _is_time(within) else f"in the period “{label(outcome, group)}”"
+    if _by_case(outcome) and within.lower() in SIDES["matched"].values():
+        return f"among {within}"
     if not labelled(outcome, group):
         return f"in the {STAND_INS[group]}"
     if outcome.design in WITH_DESIGNS:
-        return f"with {label_within(outcome, group)}"
-    if outcome.design == "before-after":
-        return f"in the period “{label(outcome, group)}”"
+        return f"with {within}"
     return f"in the group “{label(outcome, group)}”"
+
+
+def by_time(outcome: Outcome) -> bool:
+    """Whether both groups are the same people at two times, which a sentence puts behind the event: "fell before"."""
+    groups: tuple[Group, Group] = ("index", "reference")
+    return outcome.design == "before-after" and all(_is_time(label_within(outcome, group)) for group in groups)
+
+
+def _is_time(label: str) -> bool:
+    return label.split(" ", 1)[0].lower() in TIMES
+
+
+def _by_case(outcome: Outcome) -> bool:
+    return outcome.design == "matched" and isinstance(outcome.table, Pairs)
+
+
+def _stand_in(outcome: Outcome, group: Group) -> str:
+    """An unnamed group: its side where the design tells it."""
+    sides = SIDES.get(outcome.design)
+    if sides is None or (outcome.design == "matched" and not _by_case(outcome)):
+        return STAND_INS[group]
+    return sides["first" if (group == "index") == (outcome.index_group == "first") else "second"]
 
 
 def outcome_name(outcome: Outcome) -> str:

@@ -10,7 +10,7 @@ from fourcount.wording.form import given, lacking, measure_of
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.unpaired import beyond, needed_line, relative_note
 from fourcount.wording.lines.words import IN_THE_STUDY, method_word
-from fourcount.wording.pairs import pairs_that_differ
+from fourcount.wording.pairs import pairs_that_differ, who_differ
 
 PAIRS_ORDER = (
     "pair_difference",
@@ -67,7 +67,9 @@ def _counts(key: str, outcome: Outcome, findings: OutcomeFindings) -> str:
     """The counts that a figure rests on; the odds ratio's are there without the pairs that agree."""
     pairs, differ = given(findings), pairs_that_differ(outcome, findings)
     if key == "pair_odds_ratio":
-        return "" if differ is None else f"{numbers.whole(differ[0])} to {numbers.whole(differ[1])} pairs that differ"
+        if differ is None:
+            return ""
+        return f"{numbers.whole(differ[0])} to {numbers.whole(differ[1])} {who_differ(outcome, sum(differ))}"
     if not isinstance(pairs, PairCounts):
         return ""
     total = numbers.whole(pairs.total)
@@ -77,4 +79,4 @@ def _counts(key: str, outcome: Outcome, findings: OutcomeFindings) -> str:
         return f"{numbers.whole(pairs.both + pairs.index_only)} of {total}"
     if key == "pair_risk_reference":
         return f"{numbers.whole(pairs.both + pairs.reference_only)} of {total}"
-    return f"{total} pairs"
+    return f"{total} people" if outcome.design == "before-after" else f"{total} pairs"

@@ -6,6 +6,7 @@ from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PairCount
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
+from fourcount.wording import pairs as sides
 from fourcount.wording.form import given, measure_of
 from fourcount.wording.meanings.parts import (
     estimate_of,
@@ -77,10 +78,14 @@ def odds_ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choi
 
 def odds_ratio_claim(outcome: Outcome, figure: Figure, choices: Choices) -> str:
     """The odds ratio of the pairs in a sentence that speaks of odds and of nothing else, without its full stop."""
+    event = spanned(names.event_words(outcome), outcome)
+    if names.by_time(outcome):
+        who = f"Within the same people, the odds that a person {event} {names.in_group(outcome, 'index')}"
+    else:
+        who = f"Within pairs, the odds that {sides.person(outcome, 'index')} {event}"
     return (
-        f"Within pairs, the odds that the person {names.in_group(outcome, 'index')} "
-        f"{spanned(names.event_words(outcome), outcome)} were {numbers.ratio(given_estimate(figure))} times those "
-        f"{names.in_group(outcome, 'reference')}{with_interval('pair_odds_ratio', figure, choices)}"
+        f"{who} were {numbers.ratio(given_estimate(figure))} times those {sides.those_of(outcome, 'reference')}"
+        f"{with_interval('pair_odds_ratio', figure, choices)}"
     )
 
 
@@ -89,12 +94,15 @@ def those_that_differ(outcome: Outcome, findings: OutcomeFindings) -> str:
     pairs = pairs_that_differ(outcome, findings)
     if pairs is None:
         return ""
-    index, reference = (names.in_group(outcome, group) for group in ("index", "reference"))
     of_index, of_reference = pairs
-    which = "pair that differs" if of_index + of_reference == 1 else "pairs that differ"
+    which = sides.who_differ(outcome, of_index + of_reference)
+    index, reference = sides.only(outcome, "index"), sides.only(outcome, "reference")
+    first = f"the event came only {index}"
+    if index.startswith("the "):  # one side of the pair, who does what the event says
+        first = f"only {index} {names.event_words(outcome)}"
     return (
-        f"It rests on the {numbers.whole(of_index + of_reference)} {which}: in {numbers.whole(of_index)} the event "
-        f"came only {index}, in {numbers.whole(of_reference)} only {reference}."
+        f"It rests on the {numbers.whole(of_index + of_reference)} {which}: in {numbers.whole(of_index)} {first}, "
+        f"in {numbers.whole(of_reference)} only {reference}."
     )
 
 
@@ -103,9 +111,10 @@ def _risk(group: names.Group, outcome: Outcome, figure: Figure, findings: Outcom
     if not isinstance(pairs, PairCounts):
         raise TypeError(group)
     events = pairs.both + (pairs.index_only if group == "index" else pairs.reference_only)
+    people = sides.people_in(outcome, group, spanned(names.event_words(outcome), outcome))
     return (
-        f"{numbers.whole(events)} of {numbers.whole(pairs.total)} people {names.in_group(outcome, group)} "
-        f"{spanned(names.event_words(outcome), outcome)}: {numbers.percent(given_estimate(figure))}"
+        f"{numbers.whole(events)} of {numbers.whole(pairs.total)} people {people}: "
+        f"{numbers.percent(given_estimate(figure))}"
         f"{with_interval(f'pair_risk_{group}', figure, choices)}. "
         f"It is an average of these people, not one person’s own risk.{no_interval(figure)}"
     )
