@@ -49,7 +49,7 @@ def test_four_counts_give_sentence_rows_and_picture(hands: Hands) -> None:
     assert hands.rows["risk_reference"] == "Risk, reference group: 17.1%, 13.8 to 21.1%"
     assert hands.rows["risk_ratio"].startswith("Risk ratio: 0.54")
     assert hands.rows["odds_ratio"].startswith("Odds ratio: 0.49")
-    assert hands.p.startswith("p < 0.001 by the (N−1) chi-square test")
+    assert hands.p.startswith("p < 0.001, two-sided (N−1 chi-square)")
     assert hands.window.patient.picture.isVisible()
     assert not hands.window.patient.waits.isVisible()
 

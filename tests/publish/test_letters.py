@@ -27,7 +27,7 @@ Of 100 people with usual care about 17 fell at least once within 12 months; of 1
 - NNTB 13 (95% interval 8 to 31) over 12 months
 - Risk ratio: 0.54 (95% interval 0.37 to 0.78), relative reduction 46%
 - Odds ratio: 0.49 (95% interval 0.32 to 0.75), as a risk ratio at 12%: 0.52 (0.35 to 0.77)
-- p < 0.001 by the (N−1) chi-square test of no association, two-sided. It does not say how large the effect is; the \
+- p < 0.001, two-sided (N−1 chi-square). It does not say how large the effect is; the \
 intervals do.
 
 For one patient: starting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant. Of 100 people with \

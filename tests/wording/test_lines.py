@@ -51,7 +51,7 @@ def test_the_example_reads_line_by_line(outcome_of, findings_of):
 def test_relative_words_and_the_other_outcome_stand_under_the_risk_ratio(outcome_of, findings_of):
     """The relative figure never stands without the absolute ones above it."""
     assert lines_of(outcome_of(), findings_of)["risk_ratio"].note == (
-        "relative reduction 46%: 22% to 63%; ratio of the other outcome 1.10 (1.04 to 1.16)"
+        "relative reduction 46%: 22% to 63%; ratio of not having the event 1.10 (1.04 to 1.16)"
     )
 
 
@@ -85,7 +85,7 @@ def test_a_correction_in_use_is_said_beside_the_figure(outcome_of, findings_of):
     )
     assert lines["risk_ratio"].note == (
         "interval with half added to the events and to the people of each group (Walter): it need not hold the "
-        "estimate; relative reduction 100%; ratio of the other outcome 1.16 (1.04 to 1.30)"
+        "estimate; relative reduction 100%; ratio of not having the event 1.16 (1.04 to 1.30)"
     )
     assert lines["risk_index"].interval == "withheld"
     assert lines["risk_index"].note.startswith("An interval of zero width is withheld")
@@ -96,7 +96,7 @@ def test_a_correction_and_a_reason_are_two_sentences(outcome_of, findings_of):
     line = lines_of(outcome_of((0, 50, 0, 50)), findings_of, Choices(family="textbook"))["risk_ratio"]
     assert line.note == (
         "interval with half added to the events and to the people of each group (Walter): it need not hold the "
-        "estimate; ratio of the other outcome 1.00. Nobody in either group had the event, so this figure is not "
+        "estimate; ratio of not having the event 1.00. Nobody in either group had the event, so this figure is not "
         "determined."
     )
 

@@ -202,8 +202,7 @@ def test_the_p_value_names_its_test(outcome_of, findings_of):
     """An exact p with its method, and no verdict from it."""
     outcome = outcome_of((12, 88, 10, 90))
     assert p_sentence(findings_of(outcome)) == (
-        "p = 0.65 by the (N−1) chi-square test of no association, two-sided. "
-        "It does not say how large the effect is; the intervals do."
+        "p = 0.65, two-sided (N−1 chi-square). It does not say how large the effect is; the intervals do."
     )
 
 

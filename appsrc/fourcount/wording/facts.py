@@ -23,7 +23,7 @@ MEASURE_NAMES = {
     "risk_difference": "difference",
     "number_needed": "number needed",
     "risk_ratio": "risk ratio",
-    "other_risk_ratio": "risk ratio of the other outcome",
+    "other_risk_ratio": "risk ratio of not having the event",
     "odds_ratio": "odds ratio",
     "hazard_ratio": "hazard ratio",
     "rate": "rate",

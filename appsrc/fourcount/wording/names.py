@@ -187,6 +187,11 @@ def _begins_with_preposition(span: str) -> bool:
     return span.split(" ", 1)[0].lower() in PREPOSITIONS
 
 
+def not_counted(outcome: Outcome) -> str:
+    """The other outcome where it is only counted, not named."""
+    return "not having the event" if outcome.counted == "left" else "having the event"
+
+
 def if_caused(outcome: Outcome) -> str:
     """What a number needed supposes where the groups were not made alike by chance."""
     return "" if outcome.design == "trial" else ", if the difference is caused by it"

@@ -1,4 +1,4 @@
-"""The sentence of the p: its value, the test behind it, what that tests, and what it does not say."""
+"""The sentence of the p: its value, the test behind it, and what it does not say."""
 
 from __future__ import annotations
 
@@ -13,16 +13,10 @@ NO_P = "There is no p: "
 P_FOLLOWS = "The p value takes a moment and will follow."
 NO_TEST = "Two printed risks have no p of their own; the interval of their difference tells as much."
 NOT_THE_SIZE = "It does not say how large the effect is; the intervals do."
-NO_ASSOCIATION = "no association"
-TESTED: dict[Form, str] = {
-    "pairs": "no difference within pairs",
-    "person-time": "equal rates",
-    "strata": "no association within the strata",
-}
+WITHIN_STRATA = ", within strata"
 WITH = " with "
-EQUAL_RATES = " of equal rates"
-BY_TEST = "{p} by the {title} of {tested}, two-sided."
-RECOVERED = "{p}, two-sided, worked out from the printed figures alone."
+BY_TEST = "{p}, two-sided ({title})."
+RECOVERED = "{p}, two-sided (worked out from the printed figures alone)."
 ONE_FOR_ALL = (
     "Whether one odds ratio may hold in all strata: {p} by the {title} (chi-square {chi_square} on {degrees}). "
     "A small p speaks against it; a large one does not show it."
@@ -53,11 +47,9 @@ def why_no_p(gap: Gap) -> str:
 
 
 def test_title(key: str) -> str:
-    """A test's name inside a sentence, with the word "test" behind it."""
-    title = _with_test(test(key).title)
-    if not title.startswith(("Score ", "Conditional ")):
-        return title
-    return f"{title[:1].lower()}{title[1:]}"
+    """A test's name inside brackets."""
+    title = test(key).title.replace("(", "").replace(")", "")
+    return f"{title[:1].lower()}{title[1:]}" if title.startswith(("Score ", "Conditional ")) else title
 
 
 test_title.__test__ = False  # type: ignore[attr-defined]  # pytest would collect a function of this name
@@ -65,7 +57,7 @@ test_title.__test__ = False  # type: ignore[attr-defined]  # pytest would collec
 
 def _with_test(title: str) -> str:
     """The word "test" behind the test's own name, before what it is done with."""
-    name, link, rest = title.removesuffix(EQUAL_RATES).partition(WITH)
+    name, link, rest = title.partition(WITH)
     return f"{name}{'' if name.endswith('test') else ' test'}{link}{rest}"
 
 
@@ -78,7 +70,7 @@ def _by_test(p: float, method: str, form: Form) -> str:
     phrase = numbers.p_phrase(p)
     if method in PRINTED:
         return RECOVERED.format(p=phrase)
-    return BY_TEST.format(p=phrase, title=test_title(method), tested=TESTED.get(form, NO_ASSOCIATION))
+    return BY_TEST.format(p=phrase, title=f"{test_title(method)}{WITHIN_STRATA if form == 'strata' else ''}")
 
 
 def _homogeneity(strata: StrataFindings | Gap | None) -> str:

@@ -113,7 +113,7 @@ def _detail(key: str, counts: Counts, choices: Choices) -> str:
 def _notes(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings) -> tuple[str, ...]:
     fragments = [half_added(figure), beyond(key, figure)]
     if key == "risk_ratio":
-        fragments += [relative_note(figure), _other_outcome_note(findings.measures["other_risk_ratio"])]
+        fragments += [relative_note(figure), _other_outcome_note(outcome, findings.measures["other_risk_ratio"])]
     if key == "odds_ratio":
         fragments.append(conversion_text(findings.conversion, names.risk_name(outcome)))
     return tuple(fragments)
@@ -135,12 +135,12 @@ def relative_note(figure: Figure) -> str:
     return f"{limits.relative(figure.estimate)}{f': {interval}' if interval else ''}"
 
 
-def _other_outcome_note(figure: Figure | AnyNumberNeeded | Gap) -> str:
+def _other_outcome_note(outcome: Outcome, figure: Figure | AnyNumberNeeded | Gap) -> str:
     if not isinstance(figure, Figure) or isinstance(figure.estimate, Gap):
         return ""
     parts = (limits.ratio_interval(figure.interval, figure.estimate), half_added(figure))
     interval = limits.bracketed("; ".join(part for part in parts if part))
-    return f"ratio of the other outcome {numbers.ratio(figure.estimate)}{interval}"
+    return f"ratio of {names.not_counted(outcome)} {numbers.ratio(figure.estimate)}{interval}"
 
 
 def conversion_text(conversion: Conversion | Gap, risk: str) -> str:

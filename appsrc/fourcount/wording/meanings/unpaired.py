@@ -74,7 +74,9 @@ def risk_ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choi
 
 def other_risk_ratio(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
     """The ratio with the other outcome counted; it is not the first one turned over."""
-    said = times(f"{names.risk_name(outcome)} of the other outcome", outcome, numbers.ratio(given_estimate(figure)))
+    said = times(
+        f"{names.risk_name(outcome)} of {names.not_counted(outcome)}", outcome, numbers.ratio(given_estimate(figure))
+    )
     return (
         f"{said}{with_interval('risk_ratio', figure, choices)}. It is not one divided by the first ratio."
         f"{no_interval(figure)}"

@@ -8,7 +8,7 @@ from types import MappingProxyType
 from fourcount.appraisal.findings import AnyNumberNeeded, OutcomeFindings
 from fourcount.record.outcome import Form, Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import lines
+from fourcount.wording import lines, names
 from fourcount.wording.extras import EXTRA_KEYS, extra_lines
 from fourcount.wording.form import lacking, measure_of
 from fourcount.wording.lines import measure_lines
@@ -25,7 +25,7 @@ __all__ = ["METHOD_MEASURES", "TEST", "Row", "Working", "formula_with_numbers", 
 
 TEST = "test"
 TEST_TITLE = "p value"
-OTHER_TITLE = "Ratio of the other outcome"
+OTHER_TITLE = "Ratio of {event}"
 STRATUM = "stratum."
 
 RowsOf = Callable[[str, Outcome, OutcomeFindings, Choices], tuple[Row, ...]]
@@ -56,7 +56,7 @@ def working(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: 
         return _of_extra(measure, outcome, findings, choices)
     if measure.startswith(STRATUM):
         return _of_stratum(measure, outcome, findings, choices)
-    title = OTHER_TITLE if measure == "other_risk_ratio" else _title(measure, outcome, findings, choices)
+    title = _title(measure, outcome, findings, choices)
     sentence = measure_sentence(measure, outcome, findings, choices)
     if lacking(findings):
         return Working(title=title, sentence=sentence, rows=())
@@ -66,6 +66,8 @@ def working(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: 
 
 def _title(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
     """What the line of the measure is called."""
+    if measure == "other_risk_ratio":
+        return OTHER_TITLE.format(event=names.not_counted(outcome))
     for line in measure_lines(outcome, findings, choices):
         if line.key == measure:
             return line.name
