@@ -81,7 +81,7 @@ def test_clusters_of_one_correct_nothing(appraised):
 def test_too_few_people_are_left_is_a_reason(appraised):
     """Whole villages that are all alike leave less than one person."""
     findings = appraised(3, 7, 5, 5, icc_text="1", cluster_size_text="1,000")
-    assert isinstance(findings.measures["risk_difference"].interval, Gap)
+    assert Gap("too-few-left") == findings.measures["risk_difference"].interval
 
 
 @pytest.mark.parametrize("baseline", ["", "12%"])
