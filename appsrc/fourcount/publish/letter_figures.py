@@ -2,10 +2,13 @@
 
 from __future__ import annotations
 
+from collections.abc import Callable, Iterable
+
 from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import exports, limits, lines, names, numbers
+from fourcount.wording.form import measure_of
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
 from fourcount.wording.lines import MeasureLine, measure_lines
@@ -16,29 +19,44 @@ ORDER = ("risk_reference", "risk_index", "risk_difference", "number_needed", "ri
 RISKS: dict[str, names.Group] = {"risk_reference": "reference", "risk_index": "index"}
 
 
+TextOf = Callable[[MeasureLine, Figure, tuple[str, ...]], str]
+"""A figure's line in words, given the reasons for what it lacks."""
+
+
 def figure_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[str, ...]:
-    """The lines of a whole unpaired table: "Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409".
+    """The lines of a whole unpaired table: "Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409"."""
+    shown = {line.key: line for line in measure_lines(outcome, findings, choices)}
+    level = limits.interval_name(choices.level)
+
+    def text_of(line: MeasureLine, figure: Figure, _reasons: tuple[str, ...]) -> str:
+        return _figure(line, figure, outcome, findings, level)
+
+    given, withheld = said_once([shown[key] for key in ORDER], outcome, findings, level, text_of)
+    return (*given, *withheld)
+
+
+def said_once(
+    lines: Iterable[MeasureLine], outcome: Outcome, findings: OutcomeFindings, level: str, text_of: TextOf
+) -> tuple[tuple[str, ...], tuple[str, ...]]:
+    """A text for every line that is given, and one for each reason that withholds others.
 
     Why an estimate, an interval or a limit is not there stands behind the first line in which it is missing.
     """
-    shown = {line.key: line for line in measure_lines(outcome, findings, choices)}
-    level = limits.interval_name(choices.level)
     given, withheld = [], []
     reasons: dict[str, None] = {}
-    for key in ORDER:
-        measure = findings.measures[key]
+    for line in lines:
+        measure = measure_of(line.key, findings)
         if isinstance(measure, Gap):
-            withheld.append(shown[key])
+            withheld.append(line)
             continue
-        line = (
-            needed_text(shown[key], outcome, level)
-            if isinstance(measure, AnyNumberNeeded)
-            else _figure(key, shown[key], outcome, findings, level)
-        )
-        new = [reason for reason in reasons_of(measure) if reason not in reasons]
-        reasons.update(dict.fromkeys(new))
-        given.append(". ".join((line, *new)))
-    return (*given, *withheld_lines(withheld))
+        why = reasons_of(measure)
+        if isinstance(measure, AnyNumberNeeded):
+            text = needed_text(line, outcome, level)
+        else:
+            text = text_of(line, measure, why)
+        given.append(". ".join((text, *(reason for reason in why if reason not in reasons))))
+        reasons.update(dict.fromkeys(why))
+    return tuple(given), withheld_lines(withheld)
 
 
 def withheld_lines(withheld: list[MeasureLine]) -> tuple[str, ...]:
@@ -57,10 +75,8 @@ def needed_text(line: MeasureLine, outcome: Outcome, level: str) -> str:
     return f"{name} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
 
 
-def _figure(key: str, line: MeasureLine, outcome: Outcome, findings: OutcomeFindings, level: str) -> str:
-    figure = findings.measures[key]
-    if not isinstance(figure, Figure):
-        raise TypeError(key)
+def _figure(line: MeasureLine, figure: Figure, outcome: Outcome, findings: OutcomeFindings, level: str) -> str:
+    key = line.key
     unit = exports.PER_100 if key == "risk_difference" else ""
     said = f"{_name(key, line, outcome)}: {line.estimate}{unit} ({level} {line.interval})"
     return ", ".join(part for part in (said, *_more(key, figure, outcome, findings)) if part)

@@ -3,21 +3,20 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import (
-    AnyNumberNeeded,
     Counts,
-    Gap,
+    Figure,
     OutcomeFindings,
     PairCounts,
     PrintedFigure,
     Rates,
     StrataFindings,
 )
-from fourcount.publish.letter_figures import needed_text, reasons_of, withheld_lines
+from fourcount.publish.letter_figures import said_once
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import exports, limits, names, numbers
 from fourcount.wording.extras import extra_lines
-from fourcount.wording.form import given, level_of, measure_of
+from fourcount.wording.form import given, level_of
 from fourcount.wording.lines import MeasureLine, measure_lines
 from fourcount.wording.pairs import only, pairs_that_differ, who_differ
 from fourcount.wording.person_time import time_in
@@ -30,24 +29,13 @@ IN_LETTERS = ("adjusted", "clusters")
 def form_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[str, ...]:
     """One line for every measure of a form, with its interval; what is withheld once for each reason."""
     level = limits.interval_name(level_of(findings, choices))
-    given_lines, withheld = [], []
-    reasons: dict[str, None] = {}
-    for line in measure_lines(outcome, findings, choices):
-        if line.group == "more":
-            continue
-        if line.withheld:
-            withheld.append(line)
-            continue
-        measure = measure_of(line.key, findings)
-        if isinstance(measure, AnyNumberNeeded):
-            text, why = needed_text(line, outcome, level), reasons_of(measure)
-        else:
-            why = () if isinstance(measure, Gap) else reasons_of(measure)
-            text = figure_text(line, level, why)
-        new = [reason for reason in why if reason not in reasons]
-        reasons.update(dict.fromkeys(new))
-        given_lines.append(". ".join((text, *new)))
-    return (*given_lines, *beside_lines(outcome, findings, choices), *withheld_lines(withheld))
+    lines = [line for line in measure_lines(outcome, findings, choices) if line.group == "main"]
+
+    def text_of(line: MeasureLine, _figure: Figure, reasons: tuple[str, ...]) -> str:
+        return figure_text(line, level, reasons)
+
+    given_lines, withheld = said_once(lines, outcome, findings, level, text_of)
+    return (*given_lines, *beside_lines(outcome, findings, choices), *withheld)
 
 
 def beside_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[str, ...]:
