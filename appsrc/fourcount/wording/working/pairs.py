@@ -5,7 +5,7 @@ from __future__ import annotations
 from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, OutcomeFindings, PairCounts
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.stats.methods import PAIR_TESTS, test
+from fourcount.stats.methods import PAIR_TESTS
 from fourcount.wording.form import given, measure_of
 from fourcount.wording.lines.pairs import whole_needed_of_pairs
 from fourcount.wording.numbers import whole
@@ -13,12 +13,11 @@ from fourcount.wording.pairs import pairs_that_differ
 from fourcount.wording.working.parts import (
     ESTIMATE,
     Row,
-    about,
     interval_rows,
     other_methods,
-    p_rows,
     quotient,
     reciprocal,
+    rows_of_tests,
     table_measure,
     value,
 )
@@ -61,8 +60,7 @@ def pair_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
     if first is None or second is None:
         return ()
     pairs = PairCounts(both=0, index_only=first, reference_only=second, neither=0)
-    own = [] if isinstance(findings.test, Gap) else about(test(findings.test.method))
-    return (*p_rows(PAIR_TESTS, (pairs,), findings.test), *own)
+    return rows_of_tests(PAIR_TESTS, pairs, findings.test)
 
 
 def pair_formula(measure: str, pairs: PairCounts) -> str:

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
+from collections.abc import Callable, Iterable
 from dataclasses import dataclass
 
 from fourcount.appraisal.findings import Figure, Gap, Probability
@@ -17,6 +17,7 @@ from fourcount.stats.methods import (
     Method,
     Test,
     method,
+    test,
 )
 from fourcount.wording import limits, lines, numbers
 from fourcount.wording.gaps import gap_text
@@ -146,12 +147,17 @@ def reciprocal(change: float, rounded_up: str) -> str:
     return f"1/{plain(change)} = {exact}, rounded up {rounded_up}"
 
 
-def p_rows(tests: tuple[Test, ...], arguments: tuple[object, ...], own: Probability | Gap) -> list[Row]:
-    """The p of every test, or why it has none; none at all where clusters withhold the family's own."""
+def rows_of_tests(
+    tests: tuple[Test, ...], counts: object, own: Probability | Gap, *, between: Iterable[Row] = ()
+) -> tuple[Row, ...]:
+    """The p of every test, or why it has none, then the family's own test in full.
+
+    Where clusters withhold the family's own p, no other one is told either.
+    """
     gap = own if isinstance(own, Gap) else own.p
-    if isinstance(gap, Gap) and gap.key.startswith(CLUSTER):
-        return []
-    return [(entry.title, p_words(entry.p, arguments)) for entry in tests]
+    withheld = isinstance(gap, Gap) and gap.key.startswith(CLUSTER)
+    every = [] if withheld else [(entry.title, p_words(entry.p, (counts,))) for entry in tests]
+    return (*every, *between, *([] if isinstance(own, Gap) else about(test(own.method))))
 
 
 def p_words(compute: Callable[..., float | Gap], arguments: tuple[object, ...]) -> str:

@@ -2,10 +2,10 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, Rates
+from fourcount.appraisal.findings import Figure, OutcomeFindings, Rates
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.stats.methods import RATE_TESTS, test
+from fourcount.stats.methods import RATE_TESTS
 from fourcount.wording import lines
 from fourcount.wording.form import given, measure_of
 from fourcount.wording.numbers import plain, quantity
@@ -13,11 +13,10 @@ from fourcount.wording.person_time import per_units, unit_sum
 from fourcount.wording.working.parts import (
     ESTIMATE,
     Row,
-    about,
     interval_rows,
     other_methods,
-    p_rows,
     quotient,
+    rows_of_tests,
     table_measure,
     value,
 )
@@ -43,8 +42,7 @@ def rate_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
     rates = given(findings)
     if not isinstance(rates, Rates):
         return ()
-    own = [] if isinstance(findings.test, Gap) else about(test(findings.test.method))
-    return (*p_rows(RATE_TESTS, (rates,), findings.test), *own)
+    return rows_of_tests(RATE_TESTS, rates, findings.test)
 
 
 def rate_formula(measure: str, rates: Rates) -> str:

@@ -12,7 +12,7 @@ from fourcount.appraisal.findings import (
 )
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.stats.methods import HOMOGENEITY_TESTS, STRATA_TESTS, homogeneity_test, test
+from fourcount.stats.methods import HOMOGENEITY_TESTS, STRATA_TESTS, homogeneity_test
 from fourcount.stats.results import HomogeneityTest
 from fourcount.wording import limits, lines, numbers
 from fourcount.wording.form import crude, measure_of
@@ -26,7 +26,7 @@ from fourcount.wording.working.parts import (
     about,
     interval_rows,
     other_methods,
-    p_rows,
+    rows_of_tests,
     table_measure,
     value,
 )
@@ -58,11 +58,10 @@ def strata_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
     if not isinstance(strata, StrataFindings):
         return ()
     counts = [stratum.counts for stratum in strata.strata]
-    own = [] if isinstance(strata.test, Gap) else about(test(strata.test.method))
     same = [(entry.title, _homogeneity(entry.test(counts))) for entry in HOMOGENEITY_TESTS]
     found = strata.homogeneity
     how = about(homogeneity_test(found.method)) if isinstance(found, Homogeneity) else []
-    return (*p_rows(STRATA_TESTS, (counts,), strata.test), *own, SPACE, *same, *how)
+    return (*rows_of_tests(STRATA_TESTS, counts, strata.test), SPACE, *same, *how)
 
 
 def pooled_parts(measure: str, t: Counts) -> tuple[float, float]:

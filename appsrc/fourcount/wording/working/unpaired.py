@@ -10,7 +10,7 @@ from fourcount.appraisal.findings import AnyNumberNeeded, Clusters, Conversion, 
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.clusters import effective
-from fourcount.stats.methods import TESTS, test
+from fourcount.stats.methods import TESTS
 from fourcount.stats.results import FractionalCounts
 from fourcount.wording import limits, lines, names, numbers
 from fourcount.wording.gaps import gap_text
@@ -25,9 +25,9 @@ from fourcount.wording.working.parts import (
     interval_label,
     interval_rows,
     other_methods,
-    p_rows,
     quotient,
     reciprocal,
+    rows_of_tests,
     value,
 )
 
@@ -186,8 +186,7 @@ def test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:
     counts = counts_behind(findings)
     if counts is None:
         return ()
-    own = [] if isinstance(findings.test, Gap) else about(test(findings.test.method))
-    return (*p_rows(TESTS, (counts,), findings.test), *_divided(findings), *own)
+    return rows_of_tests(TESTS, counts, findings.test, between=_divided(findings))
 
 
 test_rows.__test__ = False  # type: ignore[attr-defined]  # pytest would collect a function of this name
