@@ -158,7 +158,7 @@ def test_a_listing_shows_the_lost_and_the_printed_effect_only_where_they_were_ty
         (strata(), "under 65: Risk ratio", (10 / 200) / (22 / 190)),
         (of_total(**BESIDE), "Printed, adjusted odds ratio", 0.61),
         (of_total(design="cohort"), "E-value", 3.115655748583495),
-        (of_total(), "Fragility, beside the number lost", 13),
+        (of_total(), "Fragility index", 13),
     ],
 )
 def test_a_sheet_holds_unrounded_numbers(outcome, name, estimate) -> None:

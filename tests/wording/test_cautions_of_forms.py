@@ -48,8 +48,8 @@ def cautions_of(outcome, choices=None):
             of_total(first_lost_text="20", second_lost_text="10"),
             "losses-overturn",
             (
-                "Had those lost (30) fared otherwise (in the extreme against the result), the interval of the "
-                "difference would tell something else about no effect."
+                "Those lost (30) could change whether the interval includes no effect, or its side: in the extreme "
+                "against the result."
             ),
         ),
         (
@@ -149,12 +149,12 @@ def test_a_caution_says_the_numbers_it_is_about(outcome, key, text):
     assert text in told
 
 
-def test_all_whole_numbers_of_a_percentage_are_named():
-    """And the one that is taken."""
+def test_a_percentage_that_fits_several_counts_is_told_shortly():
+    """The counts by name stand under the table."""
     text = caution_text(
         Caution(key="percent-several", facts={"text": "9%", "counts": "36, 37, 38", "total": 412, "value": 37})
     )
-    assert text == "9%: 36, 37, 38 of 412 all round to this percentage; 37, the nearest, is taken."
+    assert text == "9% fits 3 counts of 412; 37, the nearest, is taken."
 
 
 @pytest.mark.parametrize(("odds", "told"), [(0.02, "p = 0.020"), (0.0004, "p < 0.001")])

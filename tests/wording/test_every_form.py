@@ -4,15 +4,17 @@ from __future__ import annotations
 
 import re
 
+import pytest
 from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from drawn_forms import count, outcomes
-from forms import paired
+from forms import effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
 from fourcount.record.paper import FAMILIES, Choices
 from fourcount.wording.cautions import caution_text, caution_title
 from fourcount.wording.extras import extra_lines
+from fourcount.wording.form import opens_more
 from fourcount.wording.gaps import mark_text
 from fourcount.wording.lines import measure_lines
 from fourcount.wording.patient import patient_words
@@ -76,3 +78,20 @@ def test_a_claim_about_pairs_in_odds_speaks_of_odds_only(cells, design):
     text = headline(outcome, appraise(outcome, Choices()), Choices())
     if text.startswith("Within pairs, the odds"):
         assert not NOT_OF_ODDS.search(text)
+
+
+@pytest.mark.parametrize(
+    ("outcome", "opens"),
+    [
+        (of_total(), True),
+        (strata(), True),
+        (paired(), False),
+        (effect_only(), False),
+        (effect_only(design="cohort"), True),
+        (person_time(adjusted_text="0.61 (0.42 to 0.88)"), True),
+        (of_total(("", "", "", "")), False),
+    ],
+)
+def test_more_is_offered_only_where_it_opens_something(outcome, opens):
+    """The p of a printed interval stands above the fold already."""
+    assert opens_more(appraise(outcome, Choices())) == opens

@@ -49,7 +49,7 @@ def test_fragility_stands_beside_the_number_lost():
     line = lines_of(LOST)["fragility"]
     assert (line.estimate, line.interval, line.detail) == ("13", "30 were lost", "night lights")
     assert "does not say how large or how sure the effect is" in line.note
-    assert lines_of(of_total())["fragility"].interval == "how many were lost was not typed"
+    assert lines_of(of_total())["fragility"].interval == "number lost not typed"
 
 
 def test_an_e_value_says_whose_it_is_and_what_it_is_not():

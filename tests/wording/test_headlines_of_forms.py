@@ -6,10 +6,11 @@ import re
 
 import pytest
 
-from forms import CONFOUNDED, at_time, effect_only, paired, person_time, strata
+from forms import CONFOUNDED, at_time, effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
-from fourcount.record.outcome import FORMS, Outcome
+from fourcount.record.outcome import FORMS, Outcome, PercentOfTotal
 from fourcount.record.paper import Choices
+from fourcount.wording.headlines import NOW_THE_OTHER
 from fourcount.wording.p_value import NOT_THE_SIZE
 from fourcount.wording.sentence import headline, measure_sentence, p_sentence
 
@@ -40,6 +41,23 @@ ASKED = {
 def test_an_empty_form_asks_for_what_it_takes(form):
     """One quiet instruction, in the words of its own grid; nothing asks for counts that nobody can type there."""
     assert said(Outcome(table=FORMS[form]())) == ASKED[form]
+
+
+@pytest.mark.parametrize(
+    ("outcome", "asked"),
+    [
+        (of_total((38, 412, "", "")), "Now the other group."),
+        (Outcome(table=PercentOfTotal(second_left_text="17.1%", second_right_text="409")), NOW_THE_OTHER),
+        (person_time(("", "", 70, 4090)), NOW_THE_OTHER),
+        (at_time(("9.2%", "6.8 to 12.4", "", "")), NOW_THE_OTHER),
+        (of_total((38, "", "", "")), "Type the four counts of the table."),
+        (of_total((38, 412, 70, "")), "Type the four counts of the table."),
+        (paired(counts=(30, 20, "", "")), ASKED["pairs"]),
+    ],
+)
+def test_where_one_group_is_typed_only_the_other_is_asked_for(outcome, asked):
+    """A half-filled grid needs no lesson on what it takes."""
+    assert said(outcome) == asked
 
 
 def meaning(key, outcome):
@@ -125,9 +143,9 @@ def meaning(key, outcome):
             effect_only(),
             (
                 "The paper prints a hazard ratio: at any moment, among people still without it, the rate of the "
-                "event with night lights was 0.72 times that with usual care (95% interval 0.55 to 0.92). Without "
-                "counts it cannot be checked against them, and it compares rates from moment to moment, and is no "
-                "risk ratio."
+                "event with night lights was 0.72 times that with usual care (95% interval 0.55 to 0.92). There "
+                "are no counts to check it against, and it compares rates from moment to moment, and is no risk "
+                "ratio."
             ),
         ),
         (
@@ -135,14 +153,14 @@ def meaning(key, outcome):
             (
                 "The paper prints an odds ratio, adjusted for age: the odds that a person with night lights fell at "
                 "least once within 12 months were 0.72 times those with usual care (95% interval 0.55 to 0.92). "
-                "Without counts it cannot be checked against them, and odds are not shares of people."
+                "There are no counts to check it against, and odds are not shares of people."
             ),
         ),
         (
             effect_only("risk_ratio", index_group="second"),
             (
                 "The paper prints a risk ratio, here turned round: the risk with usual care was 1.39 times that with "
-                "night lights (95% interval 1.09 to 1.82). Without counts it cannot be checked against them, and by "
+                "night lights (95% interval 1.09 to 1.82). There are no counts to check it against, and by "
                 "itself it does not say how large the risks are."
             ),
         ),

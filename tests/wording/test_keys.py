@@ -167,8 +167,8 @@ def test_a_caution_says_the_numbers_it_is_about():
     """The risk ratio kept constant names both risks."""
     text = cautions.caution_text(Caution(key="effect-kept-constant", facts=FACTS))
     assert text == (
-        "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%; keeping that of the other "
-        "outcome the same instead would give other figures."
+        "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%; keeping the risk ratio "
+        "of not having the event constant instead would give other figures."
     )
     by_odds = cautions.caution_text(Caution(key="effect-kept-constant", facts={**FACTS, "effect": "odds_ratio"}))
     assert by_odds == "The odds ratio is assumed to be the same at 12% as at the study’s own 17.1%."

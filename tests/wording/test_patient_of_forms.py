@@ -51,15 +51,15 @@ def test_an_interval_of_a_patient_has_the_level_of_the_print():
 @pytest.mark.parametrize(
     ("outcome", "help_"),
     [
-        (paired(), "can be"),
-        (person_time(), "can be"),
-        (effect_only(), "can be"),
-        (effect_only("risk_ratio"), "Type a starting risk"),
-        (strata(), "Type a starting risk"),
-        (paired("matched"), "can be"),
+        (paired(), "Pairs cannot be carried to one patient."),
+        (person_time(), "Rates cannot be carried to one patient."),
+        (effect_only(), "A hazard ratio cannot be turned into a risk here."),
+        (effect_only("risk_ratio"), "Type a starting risk: the paper’s ratio alone does not give one."),
+        (strata(), "Each stratum has its own starting risk: type the patient’s."),
+        (paired("matched"), "Pairs cannot be carried to one patient."),
     ],
 )
-def test_where_nobody_is_carried_one_sentence_says_what_would_help(outcome, help_):
+def test_where_nobody_is_carried_one_sentence_says_why_or_what_would_help(outcome, help_):
     """In place of a picture."""
     words = words_of(outcome)
     assert help_ in words.detail

@@ -9,18 +9,18 @@ PLAIN_ESTIMATE = (
     "infinity."
 )
 TEXTS = {
-    "read-as": ("How a count was read", "{text} is read as {value}; two counts need two cells."),
+    "read-as": ("How a count was read", "{text} is read as {value}."),
     "percent-disagrees": (
         "A percentage in the print",
-        "{text}: {events} of {total} does not round to this percentage; the count is used.",
+        "{text} does not fit {events} of {total}; the count is used.",
     ),
     "percent-several": (
         "A percentage in the print",
-        "{text}: {counts} of {total} all round to this percentage; {value}, the nearest, is taken.",
+        "{text} fits {how_many} counts of {total}; {value}, the nearest, is taken.",
     ),
     "percent-none": (
         "A percentage in the print",
-        "{text}: no whole number of {total} rounds to this percentage; {value}, the nearest, is taken.",
+        "{text} fits no count of {total}; {value}, the nearest, is taken.",
     ),
     "index-looks-like-control": (
         "Which group is which",
@@ -107,7 +107,7 @@ TEXTS = {
     "no-control": (
         "Before and after",
         (
-            "Nobody was left as they were: time, other changes and people’s own return to their average may explain "
+            "There is no comparison group: time, other changes and people’s own return to their average may explain "
             "the difference as well."
         ),
     ),
@@ -155,10 +155,7 @@ TEXTS = {
     ),
     "losses-overturn": (
         "People lost to follow-up",
-        (
-            "Had those lost ({lost}) fared otherwise ({scenarios}), the interval of the difference would tell "
-            "something else about no effect."
-        ),
+        ("Those lost ({lost}) could change whether the interval includes no effect, or its side: {scenarios}."),
     ),
     "cluster-without-icc": ("Clusters", "{reason}"),
     "cluster-corrected": (
@@ -215,6 +212,6 @@ TEXTS = {
     ),
     "adjusted-converted": (
         "An adjusted odds ratio",
-        "It is converted at {baseline} as if it were a crude one, which is approximate.",
+        "The adjusted odds ratio is converted at {baseline} as if crude; this is approximate.",
     ),
 }

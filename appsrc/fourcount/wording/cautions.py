@@ -24,8 +24,8 @@ HALF_ADDED_TO_A_RATIO = (
     f"Because of a count of 0, the textbook interval of the {{measure}} is that with {WALTER}. {PLAIN_ESTIMATE}"
 )
 RATIO_KEPT_CONSTANT = (
-    "The {effect} is assumed to be the same at {baseline} as at the study’s own {study}; keeping that of the other "
-    "outcome the same instead would give other figures."
+    "The {effect} is assumed to be the same at {baseline} as at the study’s own {study}; keeping the {effect} of not "
+    "having the event constant instead would give other figures."
 )
 SAID_OF_THE_PATIENT = ("baseline-uncertain",)
 """The cautions that the patient's own words say already, wherever both stand together."""
@@ -92,6 +92,8 @@ def _said(caution: Caution) -> dict[str, str]:
     said: dict[str, str] = {}
     if "reason" in facts:
         said["reason"] = gap_text(Gap(str(facts["reason"])))
+    if "counts" in facts:
+        said["how_many"] = numbers.whole(len(str(facts["counts"]).split(", ")))
     if "scenarios" in facts:
         keys = str(facts["scenarios"]).split(", ")
         said["scenarios"] = "; ".join(SCENARIOS.get(key, key) for key in keys)

@@ -52,7 +52,7 @@ NAMES = {
     "prevented_exposed": "Prevented fraction, exposed",
     "attributable_population": "Attributable fraction, population",
     "e_value": "E-value",
-    "fragility": "Fragility, beside the number lost",
+    "fragility": "Fragility index",
     "losses": "People lost to follow-up",
 }
 SCENARIO_NAMES = {
@@ -72,11 +72,11 @@ CONVERTED = {
     "hazard_ratio": "the hazard ratio was turned into a risk ratio of a common event first",
 }
 FRAGILITY_NOTE = (
-    "So many more events in the group with the lower risk would bring Fisher’s p from {before} to {after}. It hangs on "
-    "the line of 0.05, and does not say how large or how sure the effect is."
+    "So many more events in the group with the lower risk would bring Fisher’s p from {before} to {after}. It depends "
+    "on the threshold of 0.05, and does not say how large or how sure the effect is."
 )
 LOST = "{lost} were lost"
-NOT_SAID = "how many were lost was not typed"
+NOT_SAID = "number lost not typed"
 OVERTURNED = "here the interval tells something else about no effect"
 TOO_NARROW = "interval too narrow, as if the lost had been seen"
 NOT_ONE = "It does not tell whose events those were."

@@ -57,6 +57,7 @@ STAND_INS = {
     "typed": "one number",
     "limit": "1,000,000,000",
     "counts": "several counts",
+    "how_many": "several",
     "unit": "another unit",
     "low": "the lower one",
     "high": "the upper one",

@@ -11,6 +11,7 @@ from fourcount.appraisal.findings import (
     Given,
     OutcomeFindings,
     PrintedFigure,
+    StrataFindings,
     TimedRisks,
 )
 from fourcount.record.outcome import COUNTED_FORMS
@@ -44,6 +45,20 @@ def level_of(findings: OutcomeFindings, choices: Choices) -> float:
     if isinstance(found, PrintedFigure):
         return found.level or USUAL_LEVEL
     return found.level if isinstance(found, TimedRisks) else choices.level
+
+
+def opens_more(findings: OutcomeFindings) -> bool:
+    """Whether anything stands under the fold that is not said above it already.
+
+    The p of a printed interval is: it stands there again only with its standard error.
+    """
+    if lacking(findings) is not None:
+        return False
+    if findings.form in COUNTED_FORMS or isinstance(findings.strata, StrataFindings):
+        return True
+    extras = findings.extras
+    beside = (field for field in extras.__struct_fields__ if field != "recovered")
+    return any(getattr(extras, field) is not None for field in beside)
 
 
 def crude(findings: OutcomeFindings) -> OutcomeFindings:

@@ -2,12 +2,15 @@
 
 from __future__ import annotations
 
+from collections import defaultdict
+
 from fourcount.record.entry.readings import Mark, Unreadable
+from fourcount.record.outcome import Form
 from fourcount.stats.results import Gap
 from fourcount.wording.facts import told
 from fourcount.wording.marks import MARK_TEXTS
 
-__all__ = ["GAP_TEXTS", "LIMIT_TEXTS", "MARK_TEXTS", "gap_text", "limit_text", "mark_text"]
+__all__ = ["GAP_TEXTS", "LIMIT_TEXTS", "MARK_TEXTS", "gap_text", "limit_text", "mark_text", "why_no_patient"]
 
 GAP_TEXTS = {
     # the numbers themselves
@@ -71,15 +74,14 @@ GAP_TEXTS = {
     "effect-unreadable": "The printed effect cannot be read; “0.54 (0.37 to 0.78)” would do.",
     "effect-not-typed": "Type the printed effect with its limits, such as 0.54 (0.37 to 0.78).",
     "no-interval-printed": "The print gives neither limits nor an exact p to rebuild them from.",
-    "carried-later": "This form is not carried to a patient here; counts of both groups, two printed risks, or a "
-    "printed risk ratio or odds ratio with a starting risk can be.",
+    "carried-later": "This figure cannot be carried to one patient.",
     "no-losses": "Nobody is said to be lost; type how many of each group were.",
     "losses-unreadable": "A number lost, or the ratio of risks among the lost, cannot be read.",
     "clusters-not-here": "Nothing here corrects this figure for clusters, so it is not given.",
     "losses-of-one-group": "Type how many were lost in each of the two groups; one of them is not known.",
     "effect-out-of-range": "A printed ratio cannot be below 0, nor a difference beyond 100 in 100; check the print.",
-    "effect-needs-baseline": "Type a starting risk: a printed effect alone holds none.",
-    "strata-need-baseline": "Type a starting risk: strata have one each, and none in common.",
+    "effect-needs-baseline": "Type a starting risk: the paper’s ratio alone does not give one.",
+    "strata-need-baseline": "Each stratum has its own starting risk: type the patient’s.",
     "other-outcome-unknown": "The printed effect says nothing of the other outcome: count the one that it is of.",
     "limits-not-printed": "A risk stands without its limits, so no interval of the difference or the ratio follows.",
     "not-counts": "This form has no four counts.",
@@ -106,6 +108,18 @@ GAP_TEXTS = {
     "formula-beyond-risks": "The bare formula’s limit parts the two risks farther than they can lie apart; "
     "the score intervals do not.",
 }
+NOT_CARRIED: defaultdict[str, str] = defaultdict(
+    lambda: GAP_TEXTS["carried-later"],
+    {"pairs": "Pairs cannot be carried to one patient.", "person-time": "Rates cannot be carried to one patient."},
+)
+NOT_CARRIED_EFFECTS = {
+    "hazard_ratio": "A hazard ratio cannot be turned into a risk here.",
+    "rate_ratio": "A rate ratio cannot be turned into a risk here.",
+    "risk_difference": "A risk difference alone cannot be carried to another starting risk.",
+    "rate_difference": "A rate difference cannot be turned into a risk here.",
+}
+"""What is said of a form, or a printed effect, that no patient's risk follows from."""
+
 LIMIT_TEXTS = {
     "beyond-one": "The upper limit of the risk would pass 100%, so the interval is open there; "
     "carrying the odds ratio avoids it.",
@@ -120,6 +134,13 @@ UNKNOWN_MARK = "{text}: this cannot be read"
 def gap_text(gap: Gap) -> str:
     """One sentence that says why a figure is not given, and what would help where something would."""
     return told(GAP_TEXTS.get(gap.key, UNKNOWN_GAP), gap.facts)
+
+
+def why_no_patient(gap: Gap, form: Form, measure: str) -> str:
+    """Why nothing is carried to one patient, in the form's own words; ``measure`` is that of a printed effect."""
+    if gap.key != "carried-later":
+        return gap_text(gap)
+    return NOT_CARRIED_EFFECTS.get(measure, GAP_TEXTS[gap.key]) if form == "effect-only" else NOT_CARRIED[form]
 
 
 def limit_text(gap: Gap) -> str:

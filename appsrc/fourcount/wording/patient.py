@@ -11,7 +11,7 @@ from fourcount.wording import carried, limits, names, numbers, of_people
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import caution_text
 from fourcount.wording.form import shown_choices
-from fourcount.wording.gaps import gap_text
+from fourcount.wording.gaps import why_no_patient
 from fourcount.wording.half_added import half_added
 from fourcount.wording.headline import DO_NOT_ADD_UP
 
@@ -59,9 +59,8 @@ def patient_words(
     without_title = f"Without: {names.label_within(outcome, 'reference')}"
     with_title = f"With: {names.label_within(outcome, 'index')}"
     if isinstance(patient, Gap):
-        return PatientWords(
-            without_title=without_title, with_title=with_title, detail=gap_text(patient), missing=missing(outcome)
-        )
+        why = why_no_patient(patient, findings.form, next(iter(findings.measures), ""))
+        return PatientWords(without_title=without_title, with_title=with_title, detail=why, missing=missing(outcome))
     people = denominator or carried.denominator_for_text(patient)
     choices = shown_choices(findings, choices)
     change = patient.difference.estimate

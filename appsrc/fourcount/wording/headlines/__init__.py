@@ -6,7 +6,7 @@ Where a form has no risks to speak of, it speaks of odds, of rates, or of what t
 from __future__ import annotations
 
 from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, Rates
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import EffectOnly, Outcome, Pairs, Strata, Table
 from fourcount.record.paper import Choices
 from fourcount.wording import meanings
 from fourcount.wording.form import given, lacking, measure_of, shown_choices
@@ -15,6 +15,7 @@ from fourcount.wording.headlines.people import people_headline
 from fourcount.wording.headlines.rates import rates_headline
 from fourcount.wording.meanings import pairs, printed, strata
 
+NOW_THE_OTHER = "Now the other group."
 UNPAIRED_KEYS = ("risk_difference", "risk_reference", "risk_index")  # the difference's gap names the empty group
 PAIR_KEYS = ("pair_difference", "pair_risk_reference", "pair_risk_index")
 RATE_KEYS = ("rate_difference", "rate_reference", "rate_index")
@@ -24,7 +25,7 @@ def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
     """What the table says, or what it still needs."""
     gap = lacking(findings)
     if gap is not None:
-        return gap_text(gap)
+        return NOW_THE_OTHER if one_group_typed(outcome.table) else gap_text(gap)
     shown = shown_choices(findings, choices)
     if findings.form == "effect-only":
         return _effect(outcome, findings, shown)
@@ -38,6 +39,18 @@ def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
         return _odds(outcome, findings, shown)
     figures = _three(UNPAIRED_KEYS, findings)
     return gap_text(figures) if isinstance(figures, Gap) else people_headline(outcome, figures, shown)
+
+
+def one_group_typed(table: Table) -> bool:
+    """Whether one group's two cells are typed and nothing of the other group's."""
+    if isinstance(table, EffectOnly | Strata | Pairs):
+        return False
+    rows = (
+        (table.first_left_text, table.first_right_text),
+        (table.second_left_text, table.second_right_text),
+    )
+    typed = [sum(bool(text.strip()) for text in row) for row in rows]
+    return sorted(typed) == [0, len(rows[0])]
 
 
 def _three(keys: tuple[str, str, str], findings: OutcomeFindings) -> tuple[Figure, Figure, Figure] | Gap:

@@ -12,7 +12,7 @@ from fourcount.wording.meanings.parts import given_estimate, no_interval, spanne
 from fourcount.wording.printed import PER_UNIT, adjusted_words, paper_measure_name
 
 TURNED = ", here turned round"
-UNCHECKED = "Without counts it cannot be checked against them"
+UNCHECKED = "There are no counts to check it against"
 NO_RISKS = "by itself it does not say how large the {risk}s are"
 NO_RATES = "by itself it does not say how large the rates are"
 NO_START = "by itself it does not say from which {risk}"
