@@ -6,11 +6,17 @@ from collections.abc import Sequence
 
 import msgspec
 
-from fourcount.record.entry.pasted.columns import with_percentages, with_risks, without_measures, without_results
+from fourcount.record.entry.pasted.columns import (
+    with_percentages,
+    with_proven_rows,
+    with_risks,
+    without_measures,
+    without_results,
+)
 from fourcount.record.entry.pasted.effects import effects_alone, only_name
 from fourcount.record.entry.pasted.grid import read_grid
 from fourcount.record.entry.pasted.groups import two_groups
-from fourcount.record.entry.pasted.headings import is_sum, is_time
+from fourcount.record.entry.pasted.headings import SEXES, heading_words, is_sum, is_time
 from fourcount.record.entry.pasted.matrix import Matrix, matrix_of
 from fourcount.record.entry.pasted.pair_table import pair_table
 from fourcount.record.entry.pasted.proportions import beside
@@ -38,7 +44,7 @@ def read_block(text: str) -> Pasted | None:
     if grid is None or whole is None:
         return None
     kept = without_measures(with_risks(whole))
-    matrix = with_percentages(without_results(kept)) if kept else None
+    matrix = with_proven_rows(with_percentages(without_results(kept))) if kept else None
     found = _understood(matrix, text) if matrix else None
     if matrix is None or found is None:
         return effects_alone(whole, grid.results)
@@ -80,6 +86,8 @@ def _understood(matrix: Matrix, text: str) -> Pasted | None:
     undecided = (
         down and across and differ and (down.score == across.score or (summed and best.form == "events-and-others"))
     )
+    sexes = best.form == "events-and-others" and all(set(heading_words(head.label)) & SEXES for head in matrix.heads)
+    undecided = undecided or sexes
     doubts = (*best.doubts, *(("orientation",) if undecided else ()))
     return _table(best, doubts, layout)
 

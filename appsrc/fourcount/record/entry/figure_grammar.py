@@ -101,6 +101,8 @@ class Grammar:
         self.tokens = tokens
         self.unnamed = unnamed
         self.leftover: list[Token] = []
+        self.decimals = [token.text for token in tokens if token.decimals]
+        self.commas = all("," in text for text in self.decimals)
 
     def figures(self) -> list[Figure]:
         """All results in reading order. Every step goes forward, so the work is linear in the text."""
@@ -189,7 +191,7 @@ class Grammar:
     def _figure(self, place: int, name: tuple[int, Name] | None) -> Figure:
         figure = Figure(name[0] if name else place, name[1] if name else None)
         token = self.tokens[place]
-        figure.estimate = printed_number(token)
+        figure.estimate = self._printed(figure, token)
         figure.unit = "percent" if token.percent else "one"
         place = self._unit(figure, place + 1)
         figure.after = place
@@ -215,6 +217,14 @@ class Grammar:
         self._close(figure)
         return figure
 
+    def _printed(self, figure: Figure, token: Token) -> PrintedNumber:
+        """A number of a figure; in a ratio a comma is a decimal one, as no ratio is printed with thousands."""
+        ratio = figure.name is not None and figure.name.measure is not None and figure.name.measure.endswith("ratio")
+        if not self.commas or not (ratio or self.decimals) or token.decimals or token.text.count(",") != 1:
+            return printed_number(token)
+        head, _, digits = token.text.partition(",")
+        return PrintedNumber(text=token.text, value=float(f"{head}.{digits}"), decimals=len(digits))
+
     def _unbounded(self, figure: Figure, place: int) -> int | None:
         """The place after "(NNTB 8 to infinity to NNTH 31)", limits that are two ranges; None for anything else."""
         if figure.measure_or("risk_ratio") != "number_needed":
@@ -239,7 +249,7 @@ class Grammar:
         if between.lower in _BETWEEN and second.kind == "number" and not self.level_at(place + 2):
             if not opened and not (estimate and token.value <= estimate.value <= second.value):
                 return None
-            figure.low, figure.high = printed_number(token), printed_number(second)
+            figure.low, figure.high = self._printed(figure, token), self._printed(figure, second)
             if token.percent or second.percent:
                 figure.unit = "percent"
             return self._unit(figure, place + 3)

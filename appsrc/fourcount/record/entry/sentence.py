@@ -130,7 +130,7 @@ class SentenceReader:
 
     def _with_count_before(self, quantity: Quantity, start: int) -> Quantity:
         """A percentage in brackets with its count, "66 participants with the ring (22%)"."""
-        alone = quantity.percent and not (quantity.events or quantity.complete)
+        alone = quantity.percent and not (quantity.events or quantity.time or quantity.low)
         if not alone or self.tokens[quantity.first - 1].text not in OPENING:
             return quantity
         for place in range(quantity.first - 2, max(start, quantity.first - _NEAR) - 1, -1):
@@ -140,8 +140,9 @@ class SentenceReader:
             if token.kind == "number":
                 following = self.tokens[place + 1].lower
                 counts = token.whole is not None and not token.percent and place not in self.busy
-                if counts and following in PEOPLE | {"in", "with", "on"}:
-                    return msgspec.structs.replace(quantity, first=place, events=token)
+                whole = msgspec.structs.replace(quantity, first=place, events=token)
+                if counts and following in PEOPLE | {"in", "with", "on"} and _agrees(whole):
+                    return whole
                 break
         return quantity
 

@@ -169,6 +169,9 @@ def _is_sign(text: str, place: int, found: list[Token]) -> bool:
     follows = text[place : place + 2]
     if not (follows[:1].isdecimal() or (follows[:1] in (".", "\u00b7", "\u221e") and follows != ".")):
         return False
+    level = [each.lower for each in found[-2:-1]] == ["ci"] and found[-1].percent
+    if level and text[place - 2].isspace():
+        return True
     return not found or not (found[-1].kind == "number" or found[-1].text in (")", "]"))
 
 

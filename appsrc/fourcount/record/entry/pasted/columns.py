@@ -129,6 +129,27 @@ def with_percentages(matrix: Matrix) -> Matrix:
     return msgspec.structs.replace(whole.only(range(len(rows)), kept), rows=_decimals_told(rows, kept, matrix.heads))
 
 
+def with_proven_rows(matrix: Matrix) -> Matrix:
+    """The matrix with a row of percentages beside the counts above it that are proven to give them."""
+    turned = matrix.turned()
+    if len(turned.heads) < 3 or turned.sections:
+        return matrix
+    rows = [list(row) for row in turned.rows]
+    for column, head in enumerate(turned.heads):
+        percents = [_percent(row[column], head) for row in rows]
+        others = [place for place in range(len(turned.heads)) if place != column]
+        target = _proven(rows, percents, others) if all(percents) else None
+        if target is None:
+            continue
+        for row, percent in zip(rows, percents, strict=True):
+            if quantity := row[target].quantity:
+                shared = msgspec.structs.replace(quantity, percent=quantity.percent or percent)
+                row[target] = msgspec.structs.replace(row[target], quantity=shared)
+        whole = msgspec.structs.replace(turned, rows=tuple(tuple(row) for row in rows))
+        return whole.only(range(len(rows)), others).turned()
+    return matrix
+
+
 def _is_percentage(matrix: Matrix, percents: Sequence[Token | None], column: int, target: int) -> bool:
     """Whether numbers are percentages by sign or heading, or are what the counts give; "mean age" is neither."""
     head = matrix.heads[column].label

@@ -44,4 +44,7 @@ def roles_of(heads: Sequence[Head]) -> list[Role]:
     if {"n", "N"} <= set(letters):
         parts: dict[str, Role] = {"n": "events", "N": "total"}
         roles = [parts.get(letter, role) for letter, role in zip(letters, roles, strict=True)]
+    lone = [letter == "n" and head.label.strip() == "n" for letter, head in zip(letters, heads, strict=True)]
+    if sum(lone) == 1 and any(role == "total" and not alone for role, alone in zip(roles, lone, strict=True)):
+        roles = ["events" if alone else role for role, alone in zip(roles, lone, strict=True)]
     return roles

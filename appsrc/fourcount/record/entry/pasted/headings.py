@@ -52,6 +52,8 @@ _RESULT = frozenset(
 _EXPOSURES = frozenset(
     words("exposed unexposed non-exposed nonexposed vaccinated unvaccinated untreated smokers non-smokers nonsmokers")
 )
+SEXES = frozenset(words("men women man woman boys girls boy girl males females male female"))
+"""Words that name groups or strata as well as whom was counted."""
 _SUMS = frozenset(words("total totals all overall both sum combined"))
 _POSITIVE = frozenset(words("yes positive + present exposed pos improved better event"))
 _NEGATIVE = frozenset(words("no negative - absent unexposed neg not non-exposed nonexposed without unimproved never"))
@@ -90,11 +92,11 @@ def _is_result(found: list[str], said: set[str]) -> bool:
 
 
 def _is_rate(_: list[str], said: set[str]) -> bool:
-    return "rate" in said or "per" in said
+    return ("rate" in said or "per" in said) and "%" not in said
 
 
 def _is_counted_percent(_: list[str], said: set[str]) -> bool:
-    counts = {"n", "no", "number", "events"} & said
+    counts = {"n", "number", "events"} & said or ("no" in said and {"%", "of", "with"} & said)
     return bool(counts) and bool({"%", "with", "events", "affected", "event", "died"} & said) and "without" not in said
 
 
@@ -102,6 +104,8 @@ def _is_total(found: list[str], said: set[str]) -> bool:
     if said == {"no"}:
         return False
     numbered = {"n", "number", "of", "the", "in"}
+    if said <= SEXES:
+        return False
     people = numbered | {"no", "group"} | PEOPLE - {"cases", "controls", "survivors", "survivor"}
     if said <= people or {"at", "risk"} <= said:
         return True
@@ -129,7 +133,7 @@ _RULES: tuple[tuple[Role, Callable[[list[str], set[str]], bool]], ...] = (
 def time_unit(text: str) -> str:
     """The unit of person-time in a heading such as "events/person-years", "" where it names none."""
     found = heading_words(text)
-    if "per" in found:
+    if "per" in found[:-1] and found[found.index("per") + 1][:1].isdigit():
         return ""
     for one, two in pairwise([*found, ""]):
         if length := time_of_people(one, two):

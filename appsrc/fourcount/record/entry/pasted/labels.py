@@ -47,7 +47,7 @@ class Labels:
         if all(before):
             return self._told_apart(*before)
         if not after[0]:
-            pair = self._both_behind(second.after, end) or self._both_ahead(start, first.first)
+            pair = self._both_behind(self._after_total(second), end) or self._both_ahead(start, first.first)
             if pair:
                 return self._told_apart(*pair)
         if not all(after):
@@ -59,6 +59,12 @@ class Labels:
         if not (after[0] or before[0]) and self.tokens[start].lower in PEOPLE:
             return self._told_apart(self.behind(start, first.first), after[1] or before[1])
         return self._told_apart(after[0] or before[0], after[1] or before[1])
+
+    def _after_total(self, quantity: Quantity) -> int:
+        """The place after a quantity, or after its total where that stands behind it."""
+        total = quantity.total.start if quantity.total else -1
+        behind = [place for place in range(quantity.after, len(self.tokens)) if self.tokens[place].start == total]
+        return behind[0] + 1 if behind else quantity.after
 
     def _behind_leading(self, quantity: Quantity, start: int) -> str:
         """The label in "of the 320 women allocated to walking, 48 ..." and in "2.5% in the sock group (10/400)"."""
@@ -294,6 +300,11 @@ class Labels:
                     return found
         return None
 
+    def _lettered(self, place: int) -> bool:
+        """Whether "group A" or "arm 1" begins here."""
+        name = self.tokens[place + 1].text if place + 1 < len(self.tokens) else ""
+        return self.tokens[place].lower in GROUP_NOUNS and len(name) == 1 and (name.isupper() or name.isdecimal())
+
     def _split(self, place: int, end: int) -> tuple[str, str] | None:
         border = None
         start = place
@@ -309,9 +320,10 @@ class Labels:
             place += 1
         if border is None:
             return None
-        while start < border and self.tokens[start].lower in ("to", *LINKING):
+        while start < border and self.tokens[start].lower in ("to", *LINKING) and not self._lettered(start):
             start += 1
-        pair = self._trimmed(start, border, None), self._trimmed(border + 1, place, None)
+        second = border + 1 + (border + 1 < place and self.tokens[border + 1].lower == "in")
+        pair = self._trimmed(start, border, None), self._trimmed(second, place, None)
         return pair if all(pair) else None
 
 

@@ -178,9 +178,9 @@ def _aligned(row: Sequence[Cell], lead: int, width: int) -> list[Cell] | None:
     while len(cells) > lead + width and cells[-1].empty:
         cells.pop()
     if len(cells) == 1 and not cells[0].total and lead + width > 1:
-        cells = [Cell(text=word, label=word) for word in _WORDS.findall(cells[0].label)]
-        if len(cells) not in (width, width + lead):
-            return None
+        cells = _parted(cells, lead, width)
+    if not cells:
+        return None
     if len(cells) == width and lead:
         cells[0] = _without_corner(cells[0])
     if len(cells) == lead + width:
@@ -198,6 +198,14 @@ def _aligned(row: Sequence[Cell], lead: int, width: int) -> list[Cell] | None:
             [cell for cell in told for _ in range(width // len(told))] if spread else (cells + [EMPTY] * width)[:width]
         )
     return cells
+
+
+def _parted(cells: list[Cell], lead: int, width: int) -> list[Cell]:
+    """A line of headings without borders as one for each column; empty where its words are more or fewer."""
+    words = [Cell(text=word, label=word) for word in _WORDS.findall(cells[0].label)]
+    if width == 1:
+        return cells
+    return words if len(words) in (width, width + lead) else []
 
 
 def _without_corner(cell: Cell) -> Cell:

@@ -171,6 +171,8 @@ class Phrases:
         second = place + 2
         if self.at(place + 1).lower != "and" or self.at(second).whole is None:
             return False
+        if self.at(second + 1).lower in PEOPLE and self.at(place - 1).lower == "the":
+            return True
         while self.at(second + 1).lower in PEOPLE:
             second += 1
         return self.at(second + 1).text in ("", ".", ",", ";", ")") or self.at(second + 1).lower == "respectively"

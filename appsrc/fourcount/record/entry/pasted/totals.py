@@ -129,7 +129,8 @@ def _ways(
     between = [each for each in found if first.after <= each.place < second.first][:_MOST]
     behind = [each for each in found if second.after <= each.place < end][:_MOST]
     after = [each for each in found if each.place >= second.after][:_MOST]
-    each_group = [each for each in (*behind, *before[::-1]) if _of_each(tokens, each.place)]
+    near = (*behind, *before[::-1]) if first.events is not None else behind
+    each_group = [each for each in near if _of_each(tokens, each.place)]
     yield from (((each, each), each in behind) for each in each_group)
     own_first, own_second = first.total is not None, second.total is not None
     if own_first and own_second:
