@@ -12,7 +12,7 @@ from scipy.stats import chi2_contingency
 
 from fourcount.stats import methods, print_only
 from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
-from fourcount.stats.results import Counts, Gap
+from fourcount.stats.results import Counts, FractionalCounts, Gap
 from tables import CELLS, counts_of, given_interval
 
 Table = Callable[..., Counts]
@@ -88,3 +88,31 @@ def test_none_of_them_is_shown_as_ours() -> None:
     assert len(set(listed)) == len(listed)
     assert not set(listed) & {(entry.measure, entry.key) for entry in methods.METHODS}
     assert not {test.key for test in PRINT_TESTS} & {test.key for test in methods.TESTS}
+
+
+def fraction_of(cells: tuple[float, float, float, float]) -> FractionalCounts:
+    """Counts as a design effect leaves them."""
+    a, b, c, d = cells
+    return FractionalCounts(index_events=a, index_non_events=b, reference_events=c, reference_non_events=d)
+
+
+@given(CELLS, st.floats(1.0, 1e9))
+def test_counts_thinned_by_clusters_have_a_figure_or_a_reason(cells: tuple[int, int, int, int], effect: float) -> None:
+    """Near one person in all or below, nothing fails: a reason, or a limit of 0 or infinity."""
+    a, b, c, d = (cell / effect for cell in cells)
+    counts = fraction_of((a, b, c, d))
+    for entry in PRINT_METHODS:
+        given_to = (counts.index_events, counts.index_total) if entry.measure == "risk" else (counts,)
+        found = entry.interval(*given_to, 0.95)
+        assert isinstance(found, Gap) or found.low <= found.high
+    for test in PRINT_TESTS:
+        p = test.p(counts)
+        assert isinstance(p, Gap) or 0 <= p <= 1
+
+
+def test_test_based_limits_of_hardly_anybody() -> None:
+    """One person or fewer is the reason; a little more lets the limits run to 0 and infinity."""
+    for function in (print_only.test_based_odds_ratio, print_only.test_based_risk_ratio):
+        assert function(fraction_of((0.3, 0.1, 0.5, 0.1)), 0.95) == Gap("too-few-left")
+        found = given_interval(function(fraction_of((0.4, 0.2, 0.1, 0.3 + 1e-9)), 0.95))
+        assert (found.low, found.high) == (0.0, math.inf)

@@ -10,11 +10,12 @@ import math
 
 from fourcount.stats import difference, odds, ratio, risk
 from fourcount.stats.estimates import odds_ratio, risk_ratio, without_a_contrast, without_people
+from fourcount.stats.log_scale import exponential
 from fourcount.stats.normal import quantile, two_sided_p
-from fourcount.stats.results import Counts, Gap, Interval
+from fourcount.stats.results import FractionalCounts, Gap, Interval
 
 
-def wald_continuity(counts: Counts, level: float) -> Interval | Gap:
+def wald_continuity(counts: FractionalCounts, level: float) -> Interval | Gap:
     """Wald's interval of the difference with (1/n1 + 1/n2)/2 more on either side (Fleiss; from memory)."""
     found = difference.wald(counts, level)
     if isinstance(found, Gap):
@@ -31,12 +32,12 @@ def risk_wald_continuity(events: int, total: int, level: float) -> Interval | Ga
     return Interval(low=found.low - 0.5 / total, high=found.high + 0.5 / total)
 
 
-def test_based_risk_ratio(counts: Counts, level: float) -> Interval | Gap:
+def test_based_risk_ratio(counts: FractionalCounts, level: float) -> Interval | Gap:
     """R to the power of 1 -+ z/chi, chi being the root of the (N-1) chi-square (Miettinen 1976; from memory)."""
     return _test_based(counts, risk_ratio(counts), level)
 
 
-def test_based_odds_ratio(counts: Counts, level: float) -> Interval | Gap:
+def test_based_odds_ratio(counts: FractionalCounts, level: float) -> Interval | Gap:
     """The same for the odds ratio."""
     return _test_based(counts, odds_ratio(counts), level)
 
@@ -44,9 +45,11 @@ def test_based_odds_ratio(counts: Counts, level: float) -> Interval | Gap:
 test_based_risk_ratio.__test__ = test_based_odds_ratio.__test__ = False  # type: ignore[attr-defined]  # no tests of ours
 
 
-def _test_based(counts: Counts, estimate: float | Gap, level: float) -> Interval | Gap:
+def _test_based(counts: FractionalCounts, estimate: float | Gap, level: float) -> Interval | Gap:
     if isinstance(estimate, Gap):
         return estimate
+    if counts.total <= 1:
+        return Gap("too-few-left")
     chi = _chi(counts, counts.total - 1, 0.0)
     if chi == 0.0:
         return Gap("zero-width")
@@ -54,10 +57,10 @@ def _test_based(counts: Counts, estimate: float | Gap, level: float) -> Interval
         return Gap("not-positive")
     size, step = abs(math.log(estimate)), quantile(level) / chi
     centre = math.log(estimate)
-    return Interval(low=math.exp(centre - size * step), high=math.exp(centre + size * step))
+    return Interval(low=exponential(centre - size * step), high=exponential(centre + size * step))
 
 
-def yates(counts: Counts) -> float | Gap:
+def yates(counts: FractionalCounts) -> float | Gap:
     """The chi-square test with a correction for continuity: N (|ad - bc| - N/2)^2 / (n1 n2 m (N - m)).
 
     Where the correction would take off more than there is, the statistic is 0. Source: Yates 1934, Suppl J R Stat
@@ -67,7 +70,7 @@ def yates(counts: Counts) -> float | Gap:
     return two_sided_p(_chi(counts, counts.total, counts.total / 2)) if gap is None else gap
 
 
-def likelihood_ratio(counts: Counts) -> float | Gap:
+def likelihood_ratio(counts: FractionalCounts) -> float | Gap:
     """The likelihood ratio chi-square test: twice the sum of count times ln(count / expected); common practice."""
     gap = without_a_contrast(counts)
     if gap is not None:
@@ -82,7 +85,7 @@ def likelihood_ratio(counts: Counts) -> float | Gap:
     return two_sided_p(math.sqrt(max(2.0 * total, 0.0)))
 
 
-def log_odds_ratio_z(counts: Counts) -> float | Gap:
+def log_odds_ratio_z(counts: FractionalCounts) -> float | Gap:
     """Wald's test of a log odds ratio, as logistic regression prints it: the z of Woolf's interval."""
     if 0 in (counts.index_events, counts.index_non_events, counts.reference_events, counts.reference_non_events):
         return without_people(counts) or Gap("one-outcome")
@@ -91,7 +94,7 @@ def log_odds_ratio_z(counts: Counts) -> float | Gap:
     return two_sided_p(math.log((a / b) * (d / c)) / math.sqrt(1 / a + 1 / b + 1 / c + 1 / d))
 
 
-def log_risk_ratio_z(counts: Counts) -> float | Gap:
+def log_risk_ratio_z(counts: FractionalCounts) -> float | Gap:
     """Wald's test of a log risk ratio: the z of Katz's interval."""
     a, c = counts.index_events, counts.reference_events
     if a == 0 or c == 0 or counts.non_events == 0:
@@ -101,7 +104,7 @@ def log_risk_ratio_z(counts: Counts) -> float | Gap:
     return two_sided_p(math.log((a / n1) * (n2 / c)) / spread)
 
 
-def _chi(counts: Counts, weight: float, correction: float) -> float:
+def _chi(counts: FractionalCounts, weight: float, correction: float) -> float:
     """The root of the chi-square statistic with a factor in place of N and |ad - bc| made smaller."""
     across = counts.index_events * counts.reference_non_events - counts.index_non_events * counts.reference_events
     margins = counts.index_total * counts.reference_total * counts.events * counts.non_events
