@@ -2,15 +2,19 @@
 
 from __future__ import annotations
 
+import math
 from collections.abc import Callable
 from typing import Any
 
 import pytest
 
-from fourcount.appraisal.check import check
+from fourcount.appraisal.check import check, check_figures
+from fourcount.appraisal.check.basis import of_counts
 from fourcount.appraisal.findings import CheckFindings, Finding, Match
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
+from printed_figures import printed
+from tables import counts_of
 
 FALLS = (38, 374, 70, 339)
 Checked = Callable[..., CheckFindings]
@@ -43,7 +47,7 @@ def test_what_reproduces_is_said_with_every_method_that_does(checked: Checked) -
     """Three methods give these digits of the risk ratio, and all are named."""
     found = checked(FALLS, "0.54 (95% CI, 0.37 to 0.78)")
     assert keys(found) == ["reproduced"]
-    assert methods(found) == ["katz", "koopman", "miettinen-nurminen"]
+    assert sorted(methods(found)) == ["katz", "koopman", "miettinen-nurminen"]
     assert first(found).agrees
     assert {match.fit for match in found.figures[0].matches} == {"all"}
     assert first(found).facts["estimate"] == pytest.approx(0.53890, abs=1e-5)
@@ -162,9 +166,13 @@ def test_an_adjusted_effect_need_not_follow(checked: Checked) -> None:
 
 
 def test_a_hazard_ratio_is_none_of_counts(checked: Checked) -> None:
-    """Where it is the risk ratio that is said; in any case that counts give none."""
-    assert keys(checked(FALLS, "HR 0.54 (95% CI, 0.37 to 0.78)")) == ["other-name", "no-hazard-ratio"]
-    assert keys(checked(FALLS, "HR 0.61 (95% CI, 0.41 to 0.91)")) == ["nearest", "no-hazard-ratio"]
+    """A note says that counts give none, with the risk ratio beside it; nothing is asked and nothing adopted."""
+    for text, fits in (("HR 0.54 (95% CI, 0.37 to 0.78)", 1), ("HR 0.61 (95% CI, 0.41 to 0.91)", None)):
+        found = checked(FALLS, text)
+        assert keys(found) == ["no-hazard-ratio", "symmetric"]
+        assert first(found).agrees
+        assert (first(found).facts.get("fits"), first(found).facts["measure"]) == (fits, "risk_ratio")
+        assert found.adopt is None
 
 
 @pytest.mark.parametrize(
@@ -250,3 +258,58 @@ def test_the_matches_carry_our_digits(checked: Checked) -> None:
     match: Match = checked(FALLS, "risk difference -7.9 percentage points (-12.5 to -3.3)").figures[0].matches[0]
     assert [round(float(value or 0), 2) for value in match.computed] == [-7.89, -12.49, -3.29]
     assert (match.method, match.level, match.orientation) == ("wald", 0.95, "as-read")
+
+
+@pytest.mark.parametrize("text", ["OR 2.5 (0.9 to ∞)", "RR 0.54 (0.37 to ∞), P=0.03", "HR 0.5 (0.3 to ∞)"])
+def test_an_infinite_limit_is_met_by_none_that_is_finite(checked: Checked, text: str) -> None:
+    """No match, and no failure."""
+    found = checked(FALLS, text)
+    assert not [match for match in found.figures[0].matches if match.fit == "all"]
+
+
+def test_an_infinite_limit_is_met_by_an_infinite_one() -> None:
+    """5 of 10 against 0 of 10: the conditional exact limits of the odds ratio run from 1.2 to infinity."""
+    figure = printed("odds_ratio", "", "1.2", "inf")
+    counts = counts_of((5, 5, 0, 10))
+    matches = check_figures((figure,), of_counts(counts), Choices()).figures[0].matches
+    assert "conditional-exact" in {match.method for match in matches}
+    assert all(match.computed[2] == math.inf for match in matches if match.fit != "estimate")
+
+
+def test_a_difference_may_have_either_sign(checked: Checked) -> None:
+    """A reduction of 7.9 points is the difference of -7.9, and its method can be adopted."""
+    found = checked(FALLS, "ARR 7.9% (3.3 to 12.5)")
+    assert keys(found) == ["other-sign"]
+    assert first(found).agrees
+    assert found.adopt == ("textbook", 0.95)
+    assert keys(checked((70, 339, 38, 374), "RD -7.9% (-12.5 to -3.3)")) == ["other-sign"]
+
+
+def test_a_percentage_that_no_word_calls_a_difference(checked: Checked) -> None:
+    """46% (22 to 63) alone is the relative reduction; called a difference, it asks to check the name."""
+    found = checked(FALLS, "46% (22 to 63)")
+    assert keys(found) == ["reproduced"]
+    assert found.figures[0].printed.measure == "relative_reduction"
+    assert keys(checked(FALLS, "risk difference 46% (22 to 63)"))[0] == "other-name"
+
+
+def test_the_method_on_screen_is_told_first(checked: Checked) -> None:
+    """Of those that give the digits; where another level is shown, none is on screen."""
+    found = checked(FALLS, "0.54 (95% CI, 0.37 to 0.78)")
+    assert first(checked(FALLS, "0.54 (0.37 to 0.78)", family="textbook")).facts["shown"] == 1
+    assert (methods(found)[0], first(found).facts["shown"]) == ("miettinen-nurminen", 1)
+    assert first(checked(FALLS, "0.54 (95% CI, 0.37 to 0.78)", level=0.9)).facts["shown"] == 0
+
+
+def test_a_half_added_is_carried_by_the_match(checked: Checked) -> None:
+    """Katz's key with the correction in use; the sentence has Walter's."""
+    found = checked((0, 14, 117, 92), "RR 0.000 (99% CI, 0.002 to 2.212)")
+    match = found.figures[0].matches[0]
+    assert (match.method, match.adjusted) == ("katz", "half")
+    assert (methods(found), first(found).facts["halved"]) == (["walter"], "walter")
+    assert checked(FALLS, "0.54 (0.37 to 0.78)").figures[0].matches[0].adjusted == ""
+
+
+def test_what_a_table_cannot_give_is_said(checked: Checked) -> None:
+    """Nobody had the event: the counts give no risk ratio to hold a print against."""
+    assert keys(checked((0, 10, 0, 10), "RR 0.50 (0.10 to 2.40)"))[-1] == "not-given"

@@ -41,11 +41,11 @@ def test_every_test_is_known_by_its_digits(test: Any) -> None:
 
 
 def test_all_tests_that_give_the_digits_are_named() -> None:
-    """To three decimals several agree: each is named, the usual ones first."""
+    """To three decimals several agree: each is named, the one on screen first, then the usual ones."""
     (finding,) = said(printed("risk_ratio", "0.54", p="0.001"), of_counts(counts_of((38, 374, 70, 339))))
     assert finding.facts["tests"] == ""  # every one
     (finding,) = said(printed("risk_ratio", "0.54", p="0.0008"), of_counts(counts_of((38, 374, 70, 339))))
-    assert str(finding.facts["tests"]).startswith("pearson")
+    assert str(finding.facts["tests"]).startswith("n-minus-1 pearson")
 
 
 def test_a_p_below_something_is_held_against_that() -> None:

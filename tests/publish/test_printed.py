@@ -48,6 +48,20 @@ def test_an_estimate_alone_has_no_method() -> None:
     assert (published["printed"][0]["method"], published["printed"][0]["level"]) == (None, None)
 
 
+def test_a_correction_in_use_is_published() -> None:
+    """Katz's interval with a half added, since a count is 0."""
+    published: Any = answer(0, 14, 117, 92, printed="RR 0.000 (99% CI, 0.002 to 2.212)")
+    first = published["printed"][0]
+    assert (first["method"], first["adjusted"]) == ("katz", "half")
+    assert set(first) == KEYS | {"adjusted"}
+
+
+def test_an_infinite_limit_is_no_obstacle() -> None:
+    """It fits nothing finite, and the answer stays strict JSON."""
+    published: Any = answer(*FALLS, printed="OR 2.5 (0.9 to ∞)")
+    assert published["check"][0]["text"].startswith("Check 2.5 (0.9 to ∞): ")
+
+
 def test_nothing_printed_adds_nothing() -> None:
     """Without the option, and with a text that says nothing, the dictionary is the one it was."""
     assert answer(*FALLS, printed="") == answer(*FALLS)

@@ -11,12 +11,17 @@ from fourcount.appraisal.check import check, check_figures
 from fourcount.appraisal.check.basis import Basis, of_counts, of_pairs, of_rates, of_strata, of_timed
 from fourcount.appraisal.check.search import has_limits
 from fourcount.appraisal.findings import CheckFindings
-from fourcount.record.outcome import EventsAndOthers, Outcome
+from fourcount.record.outcome import CELLS, EffectOnly, EventsAndOthers, Outcome, Pairs, RiskAtTime, Table
 from fourcount.record.paper import Choices
+from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
+from fourcount.stats.entries.strata import STRATA_METHODS
+from fourcount.stats.entries.timed import TIMED_METHODS
+from fourcount.stats.methods import METHODS, PAIR_METHODS, PAIR_TESTS, RATE_METHODS, RATE_TESTS, STRATA_TESTS, TESTS
 from fourcount.stats.results import LimitedRisk, PairCounts, Rates, TimedRisks
-from fourcount.wording.check import TEXTS, adopt_text, check_lines, figure_lines, finding_text
-from fourcount.wording.check_names import MEASURES, method_list, test_list
+from fourcount.wording.check import adopt_text, check_lines, figure_lines, finding_text
+from fourcount.wording.check_names import MEASURES, OR, few, inside, method_names, test_names
 from fourcount.wording.check_p import P_TEXTS
+from fourcount.wording.check_texts import TEXTS
 from printed_figures import printed
 from tables import counts_of
 
@@ -55,11 +60,18 @@ PRINTS = [
     printed("p", p="0.03"),
     printed("risk_ratio", "", "0.372", "0.781"),
     printed("odds_ratio", "2.05", "1.27", "3.30"),
+    printed("odds_ratio", "2.05", "1.27", "inf", p="0.04"),
+    printed("risk_ratio", "0.54", "0.37", "0.78", p="0.2"),
+    printed("risk_ratio", "0.54", "", "0.78", p="0.2"),
+    printed("risk_ratio", "", "0.37", "", p="0.2"),
+    printed("risk_difference", "7.9", "3.3", "12.5", unit="percent"),
+    printed("risk_difference", "7.9", "3.3", "20.5", unit="percent"),
 ]
 BASES = {
     "counts": of_counts(counts_of(FALLS)),
     "referrals": of_counts(counts_of((847, 153, 906, 94))),
     "zeros": of_counts(counts_of((0, 10, 5, 5))),
+    "nobody": of_counts(counts_of((0, 10, 0, 10))),
     "pairs": of_pairs(PairCounts(both=12, index_only=25, reference_only=10, neither=53)),
     "rates": of_rates(Rates(index_events=38, index_time=4120.0, reference_events=70, reference_time=4090.0)),
     "strata": of_strata((counts_of((10, 90, 20, 180)), counts_of((40, 60, 15, 35))), counts_of((50, 150, 35, 215))),
@@ -96,7 +108,7 @@ def test_what_asks_says_check_and_what_agrees_does_not(basis: Basis) -> None:
     """The word stands in each sentence that asks for something, or in the one before it."""
     for figure in found(basis).figures:
         for line in figure_lines(figure):
-            asks = "heck " in line.text or line.key in ("also-fits", "no-hazard-ratio")
+            asks = "heck " in line.text or line.key == "also-fits"
             assert asks is not line.agrees, line.text
 
 
@@ -122,8 +134,8 @@ def line_of(text: str, **rest: Any) -> str:
         (
             "RR 0.54 (95% CI, 0.37 to 0.78)",
             (
-                "0.54 (0.37 to 0.78) follows from the counts: the risk ratio is 0.539 (0.372 to 0.781) by Katz log, "
-                "Koopman score or Miettinen–Nurminen score at 95%."
+                "0.54 (0.37 to 0.78) follows from the counts: the risk ratio is 0.539 (0.372 to 0.781) by the method "
+                "shown, Miettinen–Nurminen score, or by Katz log and 1 other method, at 95%."
             ),
         ),
         (
@@ -144,14 +156,14 @@ def line_of(text: str, **rest: Any) -> str:
             "RR 0.539 (95% CI, 0.395 to 0.735)",
             (
                 "Check the level: 0.539 (0.395 to 0.735) fits the risk ratio at 90%, 0.5389 (0.3949 to 0.7354), by "
-                "Katz log, while the print says 95%."
+                "Katz log, while the paper says 95%."
             ),
         ),
         (
             "RR 0.54 (0.37 to 0.87)",
             (
-                "Check the upper limit: Katz log, Koopman score or Miettinen–Nurminen score at 95% gives 0.781, not "
-                "0.87, while the other limit and the estimate fit; two of its digits may have changed places."
+                "Check the upper limit: Katz log, Koopman score and 1 other method at 95% give 0.781, not 0.87, while "
+                "the other limit and the estimate fit; two of its digits may have changed places."
             ),
         ),
         (
@@ -194,14 +206,34 @@ def test_a_percentage_in_a_cell() -> None:
 
 def test_the_command_that_adopts() -> None:
     """It names family and level."""
-    assert adopt_text(("textbook", 0.90)) == "Show this record with textbook intervals at 90%, as the paper does"
+    assert adopt_text(("textbook", 0.90)) == "Use the paper’s method: textbook, 90%"
 
 
 def test_names_of_methods_and_tests() -> None:
-    """Those known in print only have titles too; several are listed."""
-    assert method_list("risk_ratio", "katz test-based") == "Katz log or Test-based"
-    assert test_list("yates") == "Yates’s corrected chi-square"
-    assert test_list("pearson fisher yates") == "Pearson chi-square, Fisher exact and Yates’s corrected chi-square"
+    """Those known in print only have titles too."""
+    assert method_names("risk_ratio", "katz test-based") == ["Katz log", "test-based limits"]
+    assert test_names("yates rate-score") == ["Yates’s corrected chi-square", "score test of equal rates"]
+
+
+def test_a_title_inside_a_sentence_begins_small_unless_it_is_a_name() -> None:
+    """Every first word of a title is a name that stands here, or no name."""
+    of_people = re.compile(
+        "Wilson|Clopper|Wald|Agresti|Jeffreys|Newcombe|Miettinen|Koopman|Katz|Baptista|Woolf|Gart|Mee|Walter|Cornfield|"
+        "Tango|Bonett|Poisson|Mantel|Fisher|Pearson|Yates|McNemar|Cochran"
+    )
+    entries = METHODS + PRINT_METHODS + PAIR_METHODS + RATE_METHODS + STRATA_METHODS + TIMED_METHODS
+    tests = TESTS + PRINT_TESTS + PAIR_TESTS + RATE_TESTS + STRATA_TESTS
+    for entry in (*entries, *tests):
+        told = inside(entry.title)
+        assert told[0].islower() or told[0] == "(" or of_people.match(told), told
+
+
+def test_no_more_than_two_names_are_told() -> None:
+    """A reader looks for one; how many others there are is said."""
+    kind = ("method", "methods")
+    assert few(["A", "B"], OR, kind) == "A or B"
+    assert few(["A", "B", "C"], OR, kind) == "A, B and 1 other method"
+    assert few(["A", "B", "C", "D"], OR, kind) == "A, B and 2 other methods"
 
 
 @pytest.mark.parametrize("figure", [one for one in PRINTS if has_limits(one)], ids=lambda one: one.text)
@@ -219,3 +251,71 @@ def test_every_measure_has_a_name() -> None:
             for match in figure.matches:
                 key = match.measure.removeprefix("unpaired_").removeprefix("crude_")
                 assert key in MEASURES
+
+
+def lines_beside(table: Table, text: str, **rest: Any) -> list[str]:
+    return [line.text for line in check_lines(check(Outcome(table=table, paper_text=text, **rest), Choices()))]
+
+
+def of_four(*cells: int) -> EventsAndOthers:
+    return EventsAndOthers(**dict(zip(CELLS, map(str, cells), strict=True)))
+
+
+def test_a_half_that_was_added_is_named() -> None:
+    """Where a count is 0 Katz and Woolf have no interval: it is Walter's, or Gart's, and the sentence says so."""
+    (walter,) = lines_beside(of_four(0, 14, 117, 92), "RR 0.000 (99% CI, 0.002 to 2.212)")
+    assert "by Walter adjusted log (1/2 added, since a count is 0) at 99%" in walter
+    (gart,) = lines_beside(of_four(28, 14, 8, 0), "OR 0.0 (0.0 to 2.1)")
+    assert "by Gart adjusted logit (1/2 added, since a count is 0) at 95%" in gart
+    assert "Katz" not in walter
+    assert "Woolf" not in gart
+
+
+def test_forms_without_four_counts_say_what_they_have() -> None:
+    """Two printed risks, or pairs, in place of the counts; a risk reduction printed without its sign is no slip."""
+    risks = RiskAtTime(first_left_text="9% (6 to 12)", second_left_text="17% (13 to 21)")
+    (line,) = lines_beside(risks, "8% (3 to 13)")
+    assert line == (
+        "8 points (3 to 13) follows from the two printed risks, printed as a reduction: 8.0 points (3.0 to 13.0) by "
+        "the method shown, joining the printed limits, at 95%."
+    )
+    pairs = Pairs(first_left_text="14", first_right_text="5", second_left_text="2", second_right_text="22")
+    (line,) = lines_beside(pairs, "difference 7.0% (-5.5 to 19.1)", design="before-after")
+    assert line == (
+        "7.0 points (−5.5 to 19.1) follows from the pairs: the paired difference is 6.98 points (−5.52 to 19.05) by "
+        "the method shown, Newcombe hybrid score for pairs, at 95%."
+    )
+
+
+def test_a_hazard_ratio_beside_risks_is_a_note() -> None:
+    """It cannot be worked out from them; what can is told for comparison, and a print that equals it is told too."""
+    risks = RiskAtTime(first_left_text="9% (6 to 12)", second_left_text="17% (13 to 21)")
+    assert lines_beside(risks, "hazard ratio, 0.52; 95% CI 0.36 to 0.76")[0] == (
+        "A hazard ratio cannot be worked out from the two printed risks; the risk ratio here is 0.529 (0.335 to "
+        "0.785), which need not agree."
+    )
+    (as_well, _) = lines_beside(of_four(*FALLS), "HR 0.54 (0.37 to 0.78)")
+    assert as_well.startswith(
+        "A hazard ratio cannot be worked out from the counts, but 0.54 (0.37 to 0.78) fits the risk ratio as well: "
+    )
+
+
+def test_one_p_has_one_paragraph() -> None:
+    """Its interval and the tests are told in one sentence, and that nothing is there to hold it against in another."""
+    _, line = lines_beside(of_four(*FALLS), "RR 0.54 (0.37 to 0.78), P = 0.2")
+    assert line == (
+        "Check p: p = 0.2 stands beside 95% limits that leave out no effect (1): the nearest test of the counts, "
+        "Yates’s corrected chi-square, gives 0.0012 and the printed limits give about 0.0012. They may rest on "
+        "different methods."
+    )
+    assert lines_beside(EffectOnly(), "OR 0.49, P = 0.3") == ["p = 0.3 cannot be checked: no limits are printed."]
+
+
+def test_limits_of_another_method_are_told_behind_the_ones_on_screen() -> None:
+    """What the window shows comes first, so that no second interval stands beside it unexplained."""
+    pairs = Pairs(first_left_text="14", first_right_text="5", second_left_text="2", second_right_text="22")
+    line = lines_beside(pairs, "difference 7.0% (-9.9 to 21.9)", design="before-after")[0]
+    assert (
+        "check the limits: the method shown, Newcombe hybrid score for pairs, gives −5.52 to 19.05 at 95%, and the "
+        "nearest, Tango score, −6.14 to 20.93." in line
+    )

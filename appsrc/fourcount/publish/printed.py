@@ -23,7 +23,8 @@ def printed(found: CheckFindings) -> Json:
     """``printed``: every way in which a printed figure follows from the counts; ``check``: what is said of them.
 
     Of a match, ``says`` is what the print calls the figure and ``as`` what it is; ``computed`` are our figures, as
-    fractions like all others here. A number needed and a ratio have no other scale.
+    fractions like all others here; a number needed and a ratio have no other scale. ``adjusted`` stands beside them
+    where the interval rests on altered counts ("half" added).
     """
     return {
         "printed": [_match(figure.printed, match) for figure in found.figures for match in figure.matches],
@@ -57,6 +58,7 @@ def _match(figure: PrintedFigure, match: Match) -> Json:
         "fit": match.fit,
         "computed": {name: _value(number, scale) for name, number in zip(names, match.computed, strict=True)},
         "text": figure.text,
+        **({"adjusted": match.adjusted} if match.adjusted else {}),
     }
 
 

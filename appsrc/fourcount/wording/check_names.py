@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import math
 from collections.abc import Mapping
 
 from fourcount.record.entry.readings import PrintedFigure, PrintedNumber
@@ -48,8 +49,32 @@ SIDES = {
     "both-swapped": "of the other outcome, with the groups swapped",
 }
 EITHER_SIDE = "with the groups swapped, or of the other outcome"
-SYMMETRIC_MEASURES = ("odds_ratio", "risk_difference", "pair_odds_ratio", "pair_difference", "conditional_odds_ratio")
+SIGN_TURNED = "with its sign turned"
+SYMMETRIC_MEASURES = ("odds_ratio", "pair_odds_ratio", "conditional_odds_ratio")
 """Measures that do not tell swapped groups from the other outcome."""
+
+GIVEN = {"pairs": "the pairs", "person-time": "the events and person-time", "risks": "the two printed risks"}
+COUNTS = "the counts"
+"""What a table hands over to follow from."""
+NO_NAMES = frozenset({"Binomial", "Conditional", "Likelihood", "Log", "Logit", "Score", "Square-and-add", "Test-based"})
+"""First words of titles that are nobody's name, and stand in lower case inside a sentence."""
+INSIDE = {
+    ("pair_ratio", "log"): "the log method for pairs",
+    ("pair_odds_ratio", "log"): "the log method for discordant pairs",
+    ("rate_ratio", "log"): "the log method for rates",
+    ("rate", "score"): "the score method for a count",
+    ("risk", "logit"): "the logit method",
+    ("risk_ratio", "test-based"): "test-based limits",
+    ("odds_ratio", "test-based"): "test-based limits",
+    ("timed_difference", "square-and-add"): "joining the printed limits",
+    ("timed_ratio", "square-and-add"): "joining the printed limits",
+}
+"""Methods whose titles read badly behind "by"."""
+HALF_ADDED = "{title} (1/2 added, since a count is 0)"
+METHODS_KIND, TESTS_KIND = ("method", "methods"), ("test", "tests")
+OTHERS = "{number} other {kind}"
+MOST_NAMED = 2
+LOWER, UPPER = "lower limit {limit}", "upper limit {limit}"
 
 AND, OR, COMMA = " and ", " or ", ", "
 VOWELS = "aeiou"
@@ -73,6 +98,8 @@ def with_article(name: str) -> str:
 
 def side_name(orientation: str, measure: str) -> str:
     """From which side a measure is seen; empty where it is as read."""
+    if orientation == "groups-swapped" and measure.endswith("difference"):
+        return SIGN_TURNED
     if orientation == "groups-swapped" and measure in SYMMETRIC_MEASURES:
         return EITHER_SIDE
     return SIDES.get(orientation, "")
@@ -83,17 +110,40 @@ def method_title(measure: str, key: str) -> str:
     return _TITLES.get((measure, key)) or method(measure, key).title
 
 
-def method_list(measure: str, keys: str) -> str:
-    """The titles of several methods, any of which would do."""
-    return listed([method_title(measure, key) for key in keys.split()], OR)
+def method_names(measure: str, keys: str, halved: str = "") -> list[str]:
+    """Several methods inside a sentence; ``halved`` is the one that stands in for another where a count is 0."""
+    return [
+        HALF_ADDED.format(title=title) if key == halved else title
+        for key in keys.split()
+        for title in (INSIDE.get((measure, key)) or inside(method_title(measure, key)),)
+    ]
 
 
-def test_list(keys: str) -> str:
-    """The titles of several tests, each of which gives the digits."""
-    return listed([_TEST_TITLES.get(key) or test(key).title for key in keys.split()], AND)
+def test_names(keys: str) -> list[str]:
+    """Several tests inside a sentence."""
+    return [inside(_TEST_TITLES.get(key) or test(key).title) for key in keys.split()]
 
 
-test_list.__test__ = False  # type: ignore[attr-defined]  # pytest would collect a function of this name
+test_names.__test__ = False  # type: ignore[attr-defined]  # pytest would collect a function of this name
+
+
+def inside(title: str) -> str:
+    """A title inside a sentence: a first word that is no name in lower case."""
+    return title[0].lower() + title[1:] if title.split(maxsplit=1)[0] in NO_NAMES else title
+
+
+def few(parts: list[str], last: str, kind: tuple[str, str], most: int = MOST_NAMED) -> str:
+    """ "A", "A or B", "A, B and 3 other methods": no more than so many names, since a reader looks for one."""
+    if len(parts) <= most:
+        return listed(parts, last)
+    left = len(parts) - most
+    others = OTHERS.format(number=left, kind=kind[left > 1])
+    return listed([*parts[:most], others], AND)
+
+
+def given_name(facts: Mapping[str, Fact]) -> str:
+    """What the figures should follow from: the counts, the pairs, the two printed risks."""
+    return GIVEN.get(str(facts.get("given", "")), COUNTS)
 
 
 def listed(parts: list[str], last: str) -> str:
@@ -103,15 +153,27 @@ def listed(parts: list[str], last: str) -> str:
 
 def printed_text(figure: PrintedFigure) -> str:
     """The figure in the digits of the print, without its name: 0.54 (0.37 to 0.78)."""
-    estimate = _as_printed(figure.estimate)
-    if figure.low is None and figure.high is None:
-        return f"{estimate}{unit(figure)}"
-    limits = f"{_as_printed(figure.low)}{numbers.TO}{_as_printed(figure.high)}"
-    return f"{estimate}{unit(figure)} ({limits})" if figure.estimate is not None else limits
+    limits = _limits_printed(figure)
+    if figure.estimate is None:
+        return limits
+    estimate = f"{as_printed(figure.estimate)}{unit(figure)}"
+    return f"{estimate} ({limits})" if limits else estimate
 
 
-def _as_printed(number: PrintedNumber | None) -> str:
-    return "…" if number is None else numbers.fixed(number.value, number.decimals)
+def _limits_printed(figure: PrintedFigure) -> str:
+    low, high = (None if one is None else as_printed(one) for one in (figure.low, figure.high))
+    if low and high:
+        return f"{low}{numbers.TO}{high}"
+    if low:
+        return LOWER.format(limit=low)
+    return UPPER.format(limit=high) if high else ""
+
+
+def as_printed(number: PrintedNumber) -> str:
+    """A number in the digits of the print."""
+    if math.isinf(number.value):
+        return numbers.plain(number.value)
+    return numbers.fixed(number.value, number.decimals)
 
 
 def unit(figure: PrintedFigure) -> str:
@@ -123,12 +185,19 @@ def unit(figure: PrintedFigure) -> str:
 
 def our_estimate(figure: PrintedFigure, facts: Mapping[str, Fact], name: str = "estimate") -> str:
     """Our estimate with one decimal more than the printed one has."""
-    return f"{ours(facts.get(name), figure.estimate or figure.low)}{unit(figure)}"
+    return f"{ours(facts.get(name), figure.estimate or figure.low or figure.high)}{unit(figure)}"
 
 
-def our_limits(figure: PrintedFigure, facts: Mapping[str, Fact]) -> str:
-    """Our limits, each with one decimal more than its printed one has."""
-    return f"{ours(facts.get('low'), figure.low)}{numbers.TO}{ours(facts.get('high'), figure.high)}"
+def our_limits(figure: PrintedFigure, facts: Mapping[str, Fact], prefix: str = "") -> str:
+    """Our limits, each with one decimal more than its printed one has; ``prefix`` where they are another method's."""
+    low = _first_finite(figure.low, figure.high, figure.estimate)
+    high = _first_finite(figure.high, figure.low, figure.estimate)
+    return f"{ours(facts.get(f'{prefix}low'), low)}{numbers.TO}{ours(facts.get(f'{prefix}high'), high)}"
+
+
+def _first_finite(*printed: PrintedNumber | None) -> PrintedNumber | None:
+    """The printed number whose decimals are taken; an infinity has none."""
+    return next((one for one in printed if one is not None and math.isfinite(one.value)), None)
 
 
 def our_figure(figure: PrintedFigure, facts: Mapping[str, Fact]) -> str:

@@ -8,19 +8,24 @@ from fourcount.wording import check_names as names
 from fourcount.wording import numbers
 
 P_TEXTS = {
-    "p-reproduced": "{printed} follows from the counts by {tests} ({ours}).",
+    "p-reproduced": "{printed} follows from {given} by {tests} ({ours}).",
     "p-from-limits": "{printed} goes with the printed limits, which give about {implied}.",
-    "p-beside-interval": "Check p: {printed} stands beside {level} limits that {hold} no effect ({no_effect}); they "
-    "may rest on different methods.",
+    "p-beside-interval": "Check p: {printed} {follows}stands beside {level} limits that {hold} no effect "
+    "({no_effect}){and_others}. They may rest on different methods.",
     "p-differs": "Check p: {printed}, while {others}. Another test or an adjustment may explain it.",
     "p-zero": "No p is 0: {printed} can only mean less than {half}.",
-    "p-unchecked": "There is nothing here to hold {printed} against.",
+    "p-unchecked": "{printed} cannot be checked: {why}.",
 }
 EVERY_TEST = "every test here"
+SHOWN_TEST = "the test shown, {test}"
+FOLLOWS_BUT = "follows from {given} by {tests} ({ours}), but "
+AND_OTHERS = ": {others}"
+NO_LIMITS, NO_WAY = "no limits are printed", "these limits do not give one"
 HOLD = {1: "include", 0: "leave out"}
-NEAREST_TEST = "the nearest test of the counts, {test}, gives {p}"
+NEAREST_TEST = "the nearest test of {given}, {test}, gives {p}"
 FROM_LIMITS = "the printed limits give about {p}"
 BOTH = " and "
+AND_BY = " and by "
 SPAN = "{least} to {most}"
 
 
@@ -28,24 +33,40 @@ def p_text(finding: Finding, figure: PrintedFigure) -> str:
     """A finding about p as a sentence."""
     facts = finding.facts
     p, implied, level = facts.get("p"), facts.get("implied"), facts.get("level")
-    tests = str(facts.get("tests", ""))
+    others = _others(finding)
     parts = {
         "printed": printed_p(figure),
-        "tests": names.test_list(tests) if tests else EVERY_TEST,
+        "given": names.given_name(facts),
+        "tests": _tests(finding),
         "ours": _span(_p_beside(p, figure), _p_beside(facts.get("p_most", p), figure)),
-        "half": numbers.plain(half) if isinstance(half := facts.get("half"), float) else "…",
+        "half": _p_beside(facts.get("half"), figure),
         "implied": _p_beside(implied, figure),
         "level": numbers.level(level) if isinstance(level, float) else "the",
         "hold": HOLD.get(int(facts.get("inside", 0)), ""),
         "no_effect": str(facts.get("no_effect", 1)),
-        "others": _others(finding),
+        "others": others,
+        "and_others": AND_OTHERS.format(others=others) if others else "",
+        "why": NO_LIMITS if figure.low is None and figure.high is None else NO_WAY,
     }
+    parts["follows"] = FOLLOWS_BUT.format_map(parts) if facts.get("source") == "p-reproduced" else ""
     return P_TEXTS[finding.key].format_map(parts)
+
+
+def _tests(finding: Finding) -> str:
+    """The tests that give the printed digits, the one in the window first and named as that."""
+    found = names.test_names(str(finding.facts.get("tests", "")))
+    if not found:
+        return EVERY_TEST
+    if finding.facts.get("shown"):
+        found[0] = SHOWN_TEST.format(test=found[0]) + ("," if len(found) > 1 else "")
+        rest = names.few(found[1:], names.AND, names.TESTS_KIND, most=1) if found[1:] else ""
+        return f"{found[0]}{AND_BY}{rest}" if rest else found[0]
+    return names.few(found, names.AND, names.TESTS_KIND)
 
 
 def printed_p(figure: PrintedFigure) -> str:
     """The p in the digits of the print: p = 0.03, p < 0.001."""
-    value = "…" if figure.p is None else numbers.fixed(figure.p.value, figure.p.decimals)
+    value = "…" if figure.p is None else names.as_printed(figure.p)
     return f"p {figure.p_relation} {value}"
 
 
@@ -68,8 +89,9 @@ def _p_alone(value: object) -> str:
 def _others(finding: Finding) -> str:
     facts, parts = finding.facts, []
     if "nearest" in facts:
-        test = names.test_list(str(facts["nearest"]))
-        parts.append(NEAREST_TEST.format(test=test, p=_p_alone(facts.get("p"))))
+        (test,) = names.test_names(str(facts["nearest"]))
+        given = names.given_name(facts)
+        parts.append(NEAREST_TEST.format(test=test, given=given, p=_p_alone(facts.get("p"))))
     if "implied" in facts:
         parts.append(FROM_LIMITS.format(p=_p_alone(facts["implied"])))
     return BOTH.join(parts)

@@ -3,32 +3,23 @@
 from __future__ import annotations
 
 from collections.abc import Iterable
-from typing import cast
 
-from fourcount.appraisal.check.search import OTHER_ANALYSES, Hit, has_limits
+from fourcount.appraisal.check.search import Hit, has_limits
+from fourcount.appraisal.check.shown import is_shown, method_of
 from fourcount.record.entry.readings import PrintedFigure
 from fourcount.record.paper import HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family
-from fourcount.stats.methods import FAMILIES, PAIR_FAMILIES, RATE_FAMILIES
 
 Adopted = tuple[str, float]
 _ORDER: tuple[Family, ...] = ("textbook", "score", "exact")  # papers usually print the textbook family
-
-_ALIKE = {
-    "pooled_risk_difference": "sato",
-    "pooled_risk_ratio": "greenland-robins",
-    "pooled_odds_ratio": "robins-breslow-greenland",
-    "timed_difference": "square-and-add",
-    "timed_ratio": "square-and-add",
-}
 
 
 def adoption(found: Iterable[tuple[PrintedFigure, tuple[Hit, ...]]], choices: Choices) -> Adopted | None:
     """The family and level whose methods give all printed limits that any method gives as read; None where none does.
 
     The record's own family is kept where it does. Figures that are not reproduced as read decide nothing, except that
-    at least one has to be.
+    at least one has to be. A hazard ratio decides nothing: no table gives one.
     """
-    told = [_told(hits) for figure, hits in found if has_limits(figure)]
+    told = [_told(hits) for figure, hits in found if has_limits(figure) and figure.measure != "hazard_ratio"]
     told = [ways for ways in told if ways]
     levels = dict.fromkeys(level for ways in told for _, _, level in ways)
     families = dict.fromkeys((choices.family, *_ORDER))
@@ -44,28 +35,9 @@ def _told(hits: tuple[Hit, ...]) -> set[tuple[str, str, float]]:
     return {
         (hit.candidate.measure, hit.match.method, hit.match.level)
         for hit in hits
-        if hit.match.fit == "all"
-        and hit.rank == hits[0].rank
-        and hit.candidate.orientation == "as-read"
-        and _shown(hit)
+        if hit.match.fit == "all" and hit.rank == hits[0].rank and is_shown(hit.candidate)
     }
-
-
-def _shown(hit: Hit) -> bool:
-    """Whether the window shows this very estimate: not a conditional one, nor turned, nor of an analysis it refuses."""
-    if hit.candidate.orientation != "as-read":
-        return False
-    return not hit.candidate.heavy and not hit.candidate.key.startswith(OTHER_ANALYSES)
 
 
 def _holds(ways: set[tuple[str, str, float]], family: str, level: float) -> bool:
     return any(at == level and method == method_of(family, measure) for measure, method, at in ways)
-
-
-def method_of(family: str, measure: str) -> str | None:
-    """The method by which a family gives a measure; all families pool strata and join printed limits alike."""
-    if measure.startswith("pair_"):
-        return cast("str | None", getattr(PAIR_FAMILIES[family], measure.removeprefix("pair_"), None))
-    if measure.startswith("rate"):
-        return cast("str | None", getattr(RATE_FAMILIES[family], measure.removeprefix("rate_"), None))
-    return _ALIKE.get(measure) or cast("str | None", getattr(FAMILIES[family], measure, None))

@@ -10,6 +10,7 @@ from fourcount.appraisal.check.other_forms import apart, clustered, discordant, 
 from fourcount.appraisal.check.percentages import Group
 from fourcount.appraisal.check.probability import Tested
 from fourcount.appraisal.check.search import NEVER_FROM
+from fourcount.appraisal.check.shown import Given
 from fourcount.appraisal.check.unpaired import unpaired
 from fourcount.appraisal.findings import Clusters, OutcomeFindings, StrataFindings, Totals
 from fourcount.record.entry.readings import PrintedMeasure
@@ -32,6 +33,7 @@ class Basis:
     tests: Callable[[], tuple[Tested, ...]] = field(default=tuple)
     largest: float = 0
     groups: tuple[Group, ...] = ()
+    given: Given = "counts"
     adoptable: bool = True  # whether the window shows these very figures under some family and level
 
 
@@ -90,6 +92,7 @@ def of_discordant(totals: Totals, outcome: Outcome) -> Basis:
         candidates=lambda says: discordant(pairs, says),
         tests=lambda: _all_tests(PAIR_TESTS, pairs),
         largest=max(index_only, reference_only),
+        given="pairs",
     )
 
 
@@ -101,6 +104,7 @@ def of_pairs(pairs: PairCounts) -> Basis:
         tests=lambda: _all_tests(PAIR_TESTS, pairs),
         largest=max(pairs.both, pairs.index_only, pairs.reference_only, pairs.neither),
         groups=((people.index_events, pairs.total), (people.reference_events, pairs.total)),
+        given="pairs",
     )
 
 
@@ -110,12 +114,13 @@ def of_rates(rates: Rates) -> Basis:
         candidates=lambda says: person_time(rates, says),
         tests=lambda: _all_tests(RATE_TESTS, rates),
         largest=max(rates.index_events, rates.reference_events),
+        given="person-time",
     )
 
 
 def of_timed(risks: TimedRisks) -> Basis:
     """Two printed risks with their limits."""
-    return Basis(candidates=lambda says: timed(risks, says))
+    return Basis(candidates=lambda says: timed(risks, says), given="risks")
 
 
 def of_strata(strata: tuple[Counts, ...], crude: Counts) -> Basis:
@@ -126,6 +131,7 @@ def of_strata(strata: tuple[Counts, ...], crude: Counts) -> Basis:
         tests=lambda: _all_tests(STRATA_TESTS, strata) + whole.tests(),
         largest=whole.largest,
         groups=whole.groups,
+        given="strata",
     )
 
 

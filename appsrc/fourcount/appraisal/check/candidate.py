@@ -12,6 +12,9 @@ from fourcount.stats.results import Gap, Interval
 
 Number = Fraction | float
 Limits = tuple[float, float]
+DIFFERENCES = frozenset(
+    {"risk_difference", "pair_difference", "pooled_risk_difference", "timed_difference", "rate_difference"}
+)
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
@@ -70,10 +73,25 @@ class Candidate:
         """The measure that the figure is: that of the intervals, or what is made of it (a relative reduction)."""
         return self.label or self.measure
 
+    @property
+    def sign_alone(self) -> bool:
+        """Whether it is the difference with its sign turned, which many papers print as a reduction."""
+        return self.orientation == "groups-swapped" and self.measure in DIFFERENCES and self.seen is same
+
+    @property
+    def as_printed(self) -> bool:
+        """Whether it is seen from the side from which the table is read; a difference may have either sign."""
+        return self.orientation == "as-read" or self.sign_alone
+
     def value(self) -> Number | None:
         """The estimate on the print's side, None where there is none."""
         found = self.estimate()
         return None if isinstance(found, Gap) else self.seen(found)
+
+    def corrected(self, way: Way, level: float) -> str:
+        """What was done to the counts behind an interval ("half" was added); "" where nothing was."""
+        found = way.interval(level)
+        return "" if isinstance(found, Gap) else found.adjusted or ""
 
     def limits(self, way: Way, level: float) -> Limits | None:
         """The interval on the print's side; None where there is none, or where a number needed passes infinity."""

@@ -2,7 +2,8 @@
 
 "1.50" has two decimals, and only what rounds to it there reproduces it, halves up or to the even digit: both are in
 use. Estimates are fractions of whole numbers and are compared exactly. Limits are floats; a billionth of a unit of the
-last digit is allowed there, since an irrational limit lies on a tie by rounding alone.
+last digit is allowed there, since an irrational limit lies on a tie by rounding alone. A printed infinity is met by an
+infinite limit of its sign alone.
 """
 
 from __future__ import annotations
@@ -17,6 +18,8 @@ Number = Fraction | float
 SCALES: dict[PrintedUnit, int] = {"one": 1, "percent": 100, "per-1000": 1000}
 _HALF = Fraction(1, 2)
 _TIE = 1e-9
+FINE = 20
+"""Units of the last digit that a number, or the way between limits, has to have."""
 _LONGEST_SLIP = 8  # digits; longer numbers are not looked through
 
 
@@ -35,8 +38,15 @@ def last_digits(printed: PrintedNumber) -> int:
     return round(printed.value * units_in_one(printed))
 
 
+def coarse(printed: PrintedNumber) -> bool:
+    """Whether a number has so few digits that one of them, or a fit by chance, says little."""
+    return math.isfinite(printed.value) and abs(last_digits(printed)) < FINE
+
+
 def rounds_to(value: Number, printed: PrintedNumber) -> bool:
     """Whether a value, on the printed scale, rounds to the printed digits."""
+    if math.isinf(printed.value):
+        return value == printed.value
     size = _in_units(value, printed)
     if size is None:
         return False
@@ -57,14 +67,16 @@ def cut_to(value: Number, printed: PrintedNumber) -> bool:
 
 def within_one(value: Number, printed: PrintedNumber) -> bool:
     """Whether the rounded value differs from the printed one by one in the last digit, or by nothing."""
-    if not _finite(value):
-        return False
+    if not _finite(value) or math.isinf(printed.value):
+        return value == printed.value
     units = last_digits(printed)
     return abs(float(value * units_in_one(printed)) - units) <= 1.5 + _TIE * max(1.0, abs(units))
 
 
 def exchanged(printed: PrintedNumber) -> tuple[PrintedNumber, ...]:
     """The print with two neighbouring digits exchanged, at each place where that changes it: 0.87 for 0.78."""
+    if math.isinf(printed.value):
+        return ()
     digits = str(abs(last_digits(printed))).zfill(printed.decimals + 1)
     if len(digits) > _LONGEST_SLIP:
         return ()
@@ -98,8 +110,10 @@ def _finite(value: Number) -> bool:
 
 def _in_units(value: Number, printed: PrintedNumber) -> Number | None:
     """The value's size in units of the last printed digit; None where its sign is not the printed one's."""
+    if not _finite(value) or math.isinf(printed.value):
+        return None
     units = last_digits(printed)
-    if not _finite(value) or (units and (value < 0) != (units < 0)):
+    if units and (value < 0) != (units < 0):
         return None
     if isinstance(value, Fraction):
         return abs(value) * units_in_one(printed)

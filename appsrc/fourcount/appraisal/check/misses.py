@@ -8,8 +8,9 @@ from typing import Literal
 
 from fourcount.appraisal.check.candidate import Candidate, Limits, Number, Way
 from fourcount.appraisal.check.digits import (
+    FINE,
+    coarse,
     cut_to,
-    last_digits,
     rounds_to,
     scale_of,
     transposed,
@@ -20,8 +21,6 @@ from fourcount.appraisal.check.search import has_limits, wanted_level
 from fourcount.record.entry.readings import PrintedFigure, PrintedNumber
 
 Kind = Literal["cut-off", "last-digit", "one-limit"]
-_FINE = 20
-"""Units of the last digit that a number, or the way between its limits, must have before one of them says little."""
 Judge = Callable[[Number, PrintedNumber], bool]
 
 
@@ -69,7 +68,7 @@ def _of_estimate(figure: PrintedFigure, value: Number) -> Miss | None:
         return None
     if cut_to(value, figure.estimate):
         return Miss(kind="cut-off", ways=())
-    fine = abs(last_digits(figure.estimate)) >= _FINE
+    fine = not coarse(figure.estimate)
     return Miss(kind="last-digit", ways=()) if fine and within_one(value, figure.estimate) else None
 
 
@@ -78,7 +77,7 @@ def _finely_printed(figure: PrintedFigure) -> bool:
     if figure.low is None or figure.high is None:
         return False
     least = min(units_in_one(figure.low), units_in_one(figure.high))
-    return (figure.high.value - figure.low.value) * least >= _FINE
+    return (figure.high.value - figure.low.value) * least >= FINE
 
 
 def _cut_or_rounded(value: Number, printed: PrintedNumber) -> bool:

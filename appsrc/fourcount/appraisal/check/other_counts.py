@@ -9,7 +9,7 @@ from dataclasses import replace
 
 import msgspec
 
-from fourcount.appraisal.check.search import has_limits, search
+from fourcount.appraisal.check.search import AS_PRINTED, has_limits, search
 from fourcount.appraisal.check.unpaired import unpaired
 from fourcount.appraisal.findings import Counts
 from fourcount.appraisal.findings.check import Finding
@@ -34,7 +34,7 @@ def other_counts(outcome: Outcome, figures: tuple[PrintedFigure, ...]) -> OtherC
 
     An estimate alone has too few digits to choose counts by.
     """
-    figures = tuple(figure for figure in figures if has_limits(figure) and not figure.adjusted)
+    figures = tuple(figure for figure in figures if has_limits(figure) and _of_counts(figure))
     if not figures or not isinstance(outcome.table, PercentOfTotal):
         return None
     reading = read_table(outcome.table)
@@ -46,15 +46,20 @@ def other_counts(outcome: Outcome, figures: tuple[PrintedFigure, ...]) -> OtherC
     return None
 
 
+def _of_counts(figure: PrintedFigure) -> bool:
+    """Whether a figure can be worked out from counts."""
+    return not figure.adjusted and figure.measure != "hazard_ratio"
+
+
 def _follows(figure: PrintedFigure, counts: Counts) -> bool:
     """Whether the figure follows as printed, by a method that is shown and needs no numpy."""
     own = tuple(
         replace(one, ways=tuple(way for way in one.ways if way.shown))
         for one in unpaired(counts, figure.measure)
-        if one.named and one.orientation == "as-read" and not one.heavy
+        if one.named and one.as_printed and not one.heavy
     )
     hits = search(figure, own, largest=math.inf)
-    return bool(hits) and hits[0].rank == (0, 0)
+    return bool(hits) and hits[0].rank == AS_PRINTED
 
 
 def _nearest_first(reading: TableReading) -> Iterator[tuple[int, int]]:

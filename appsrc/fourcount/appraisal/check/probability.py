@@ -35,13 +35,22 @@ class Implied:
     most: float
 
 
-def p_findings(figure: PrintedFigure, tests: tuple[Tested, ...], level: float) -> tuple[Finding, ...]:
-    """What there is to say of the printed p; ``level`` is that of the limits beside it."""
+def p_findings(figure: PrintedFigure, tests: tuple[Tested, ...], level: float, shown: str = "") -> tuple[Finding, ...]:
+    """What there is to say of the printed p; ``level`` is that of the limits beside it, ``shown`` the window's test.
+
+    The p of a hazard ratio, or of an adjusted figure, is none of the table's.
+    """
     if figure.p is None:
         return ()
+    if figure.adjusted or figure.measure == "hazard_ratio":
+        tests = ()
+    tests = tuple(sorted(tests, key=lambda test: test.key != shown))
     beside = _beside_interval(figure, level)
     zero = (Finding(key="p-zero", facts={"half": bounds(figure.p)[1]}, agrees=True),) if figure.p.value == 0 else ()
-    return (*zero, *beside, _source(figure, figure.p, tests, level, contradicted=bool(beside)))
+    source = _source(figure, figure.p, tests, level, shown, contradicted=bool(beside))
+    if beside:
+        return (*zero, Finding(key="p-beside-interval", facts={**source.facts, **beside, "source": source.key}))
+    return zero if zero and source.key == "p-unchecked" else (*zero, source)
 
 
 def agrees(p: float, printed: PrintedNumber, figure: PrintedFigure) -> bool:
@@ -76,13 +85,12 @@ def implied_p(triple: Triple, level: float) -> Implied | None:
     )
 
 
-def _beside_interval(figure: PrintedFigure, level: float) -> tuple[Finding, ...]:
-    """A p on one side of 1 - level beside limits on the other side of no effect."""
+def _beside_interval(figure: PrintedFigure, level: float) -> dict[str, Fact]:
+    """The facts of a p on one side of 1 - level beside limits on the other side of no effect; else none."""
     inside, below = _holds_no_effect(figure), _below(figure, 1.0 - level)
     if inside is None or below is None or figure.p is None or inside is not below:
-        return ()
-    facts: dict[str, Fact] = {"inside": int(inside), "level": level, "no_effect": _no_effect(figure)}
-    return (Finding(key="p-beside-interval", facts=facts),)
+        return {}
+    return {"inside": int(inside), "level": level, "no_effect": _no_effect(figure)}
 
 
 def _holds_no_effect(figure: PrintedFigure) -> bool | None:
@@ -116,12 +124,13 @@ def _below(figure: PrintedFigure, alpha: float) -> bool | None:
 
 
 def _source(
-    figure: PrintedFigure, p: PrintedNumber, tests: tuple[Tested, ...], level: float, *, contradicted: bool
+    figure: PrintedFigure, p: PrintedNumber, tests: tuple[Tested, ...], level: float, shown: str, *, contradicted: bool
 ) -> Finding:
-    fitting = () if figure.adjusted else tuple(test for test in tests if agrees(test.p, p, figure))
+    fitting = tuple(test for test in tests if agrees(test.p, p, figure))
     if fitting:
         every = len(fitting) == len(tests) > 1
         facts: dict[str, Fact] = {"tests": "" if every else " ".join(test.key for test in fitting)}
+        facts |= {"shown": int(not every and fitting[0].key == shown)}
         facts |= {"p": min(test.p for test in fitting), "p_most": max(test.p for test in fitting)}
         return Finding(key="p-reproduced", facts=facts, agrees=True)
     facts = {}
@@ -131,7 +140,7 @@ def _source(
         facts["implied"] = implied.likely
         if not contradicted and _allows(implied, p, figure):
             return Finding(key="p-from-limits", facts={**facts, "level": level}, agrees=True)
-    if tests and not figure.adjusted:
+    if tests:
         nearest = min(tests, key=lambda test: abs(math.log(max(test.p, 1e-300) / max(p.value, 1e-300))))
         facts |= {"nearest": nearest.key, "p": nearest.p}
     return Finding(key="p-differs" if facts else "p-unchecked", facts=facts, agrees=not facts)

@@ -20,6 +20,8 @@ OTHER_ANALYSES = ("unpaired_", "crude_", "unclustered_")
 """How the keys of measures begin that are worked out as the form does not ask for."""
 
 USUAL_LEVEL = 0.95
+AS_PRINTED = (0, 0)
+"""The rank of a whole fit at the level under the print's own name."""
 LEVELS = (0.95, 0.90, 0.99)
 ALWAYS_TO = 100_000
 NEVER_FROM = 10_000_000
@@ -36,7 +38,7 @@ class Hit:
     @property
     def place(self) -> int:
         """0 as printed, 1 under another name, 2 the other way round, 3 both."""
-        return (not self.candidate.named) + 2 * (self.candidate.orientation != "as-read")
+        return (not self.candidate.named) + 2 * (not self.candidate.as_printed)
 
     @property
     def rank(self) -> tuple[int, int]:
@@ -128,7 +130,7 @@ def both_print(limits: Limits, figure: PrintedFigure, candidate: Candidate) -> b
 def prints(value: Number, printed: PrintedNumber, figure: PrintedFigure, candidate: Candidate) -> bool:
     """Whether a value prints as these digits on the figure's scale; a number needed may also be rounded up."""
     scaled = value * scale_of(figure)
-    if candidate.key == "number_needed" and printed.decimals == 0 and math.isfinite(scaled):
+    if candidate.key == "number_needed" and printed.decimals == 0 and math.isfinite(scaled + printed.value):
         return rounds_to(scaled, printed) or math.ceil(scaled * (1 - 1e-9)) == abs(last_digits(printed))
     return rounds_to(scaled, printed)
 
@@ -149,6 +151,7 @@ def hit(figure: PrintedFigure, candidate: Candidate, way: Way | None, level: flo
             None if limits is None else limits[0] * scale,
             None if limits is None else limits[1] * scale,
         ),
+        adjusted="" if way is None or limits is None else candidate.corrected(way, level),
     )
     return Hit(match=match, candidate=candidate, at_level=abs(level - wanted_level(figure)) < 1e-12)
 
@@ -167,7 +170,11 @@ def distance(limits: Limits | None, figure: PrintedFigure) -> float:
         return math.inf
     scale = scale_of(figure)
     pairs = zip(limits, (figure.low, figure.high), strict=True)
-    return sum(abs(limit * scale - printed.value) for limit, printed in pairs if printed is not None)
+    return sum(_apart(limit * scale, printed.value) for limit, printed in pairs if printed is not None)
+
+
+def _apart(limit: float, printed: float) -> float:
+    return 0.0 if limit == printed else abs(limit - printed)
 
 
 def _intervals_alone(figure: PrintedFigure, candidates: tuple[Candidate, ...]) -> list[Hit]:
@@ -178,7 +185,7 @@ def _intervals_alone(figure: PrintedFigure, candidates: tuple[Candidate, ...]) -
     return [
         hit(figure, candidate, way, level, "interval")
         for candidate in candidates
-        if not candidate.heavy
+        if not candidate.heavy and candidate.value() is not None
         for way in candidate.ways
         if not way.heavy
         for limits in (candidate.limits(way, level),)

@@ -6,6 +6,7 @@ not be; all others are, up to the digits printed. No counts are needed.
 
 from __future__ import annotations
 
+import math
 from dataclasses import dataclass
 from typing import Literal
 
@@ -28,9 +29,11 @@ class Triple:
 
 
 def triple_of(figure: PrintedFigure) -> Triple | None:
-    """The three numbers where all are printed and the measure has a scale of symmetry; else None."""
+    """The three numbers where all are printed and finite and the measure has a scale of symmetry; else None."""
     scaled = figure.measure in LOG_MEASURES or figure.measure in PLAIN_MEASURES
     if not scaled or figure.estimate is None or figure.low is None or figure.high is None:
+        return None
+    if not all(math.isfinite(part.value) for part in (figure.estimate, figure.low, figure.high)):
         return None
     return Triple(estimate=figure.estimate, low=figure.low, high=figure.high, log_scale=figure.measure in LOG_MEASURES)
 

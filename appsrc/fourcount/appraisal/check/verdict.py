@@ -2,12 +2,13 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Iterator
+from collections.abc import Iterable, Iterator, Sequence
 
 from fourcount.appraisal.check.candidate import Candidate, Way
-from fourcount.appraisal.check.digits import last_digits, transposed
+from fourcount.appraisal.check.digits import coarse, transposed
 from fourcount.appraisal.check.misses import Miss, near_miss
 from fourcount.appraisal.check.search import OTHER_ANALYSES, Hit, has_limits, hit, nearest_way, wanted_level
+from fourcount.appraisal.check.shown import Shown
 from fourcount.appraisal.check.symmetry import Triple, mirrored_limit, ordered, slips, symmetric, triple_of
 from fourcount.appraisal.findings.check import Finding
 from fourcount.record.entry.readings import PrintedFigure
@@ -15,21 +16,26 @@ from fourcount.stats.results import Fact
 
 Facts = dict[str, Fact]
 
+LAST_RESORTS = ("nearest", "not-given", "adjusted")
+"""What is said last, behind what the print says of itself."""
 WHOLE = ("reproduced", "other-name", "other-way-round", "other-name-and-way")
 ESTIMATE = ("estimate-only", "estimate-other-name", "estimate-other-way", "estimate-other-name-and-way")
+FALLBACKS = {"katz": "walter", "woolf": "gart"}
+"""Whose interval stands in for a method's where a count is 0."""
 _MOST_OTHERS = 3
-_FEW_UNITS = 20
 
 
 def effect_findings(
-    figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...], *, heavy: bool
+    figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...], shown: Shown, *, heavy: bool
 ) -> tuple[Finding, ...]:
     """What the counts say of the estimate and its limits, then what the limits say of themselves."""
-    found = tuple(_from_counts(figure, hits, candidates, heavy=heavy))
+    if figure.measure == "hazard_ratio" and candidates:
+        return (_no_hazard_ratio(figure, hits, candidates, shown), *symmetry_findings(figure, alone=True))
+    found = tuple(_from_counts(figure, hits, candidates, shown, heavy=heavy))
     whole = bool(hits) and hits[0].match.fit == "all"
     told = whole or any(finding.key in ("one-limit", "interval-only", "cut-off", "last-digit") for finding in found)
     symmetry = () if told else symmetry_findings(figure, alone=not candidates)
-    last = found[-1:] if found and found[-1].key in ("nearest", "adjusted") else ()
+    last = found[-1:] if found and found[-1].key in LAST_RESORTS else ()
     return found[: len(found) - len(last)] + symmetry + last
 
 
@@ -57,31 +63,46 @@ def _scale(triple: Triple) -> Facts:
 
 
 def _from_counts(
-    figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...], *, heavy: bool
+    figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...], shown: Shown, *, heavy: bool
 ) -> Iterator[Finding]:
     if not candidates:
         return
     if not hits:
-        yield from _nothing_fits(figure, candidates, heavy=heavy)
+        yield from _nothing_fits(figure, candidates, shown, heavy=heavy)
     elif hits[0].match.fit == "all" or (hits[0].match.fit == "interval" and figure.estimate is None):
-        yield from _whole(figure, hits, candidates)
+        yield from _whole(figure, hits, candidates, shown)
     elif hits[0].match.fit == "interval":
         yield _near(figure, candidates, heavy=heavy) or _interval_only(figure, hits)
     else:
-        yield from _estimate_alone(figure, hits, candidates, heavy=heavy)
-    if figure.measure == "hazard_ratio":
-        yield Finding(key="no-hazard-ratio")
+        yield from _estimate_alone(figure, hits, candidates, shown, heavy=heavy)
 
 
-def _whole(figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...]) -> Iterator[Finding]:
+def _no_hazard_ratio(
+    figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...], shown: Shown
+) -> Finding:
+    """No table gives a hazard ratio: what it gives instead, and whether that happens to be the print."""
+    top = next(_groups(hits), ())
+    if top and top[0].rank[0] == 0 and top[0].candidate.as_printed:
+        return Finding(key="no-hazard-ratio", facts={**_facts_of(top, shown), "fits": 1}, agrees=True)
+    own = candidates[0]
+    way = shown.way(own, wanted_level(figure)) or next(iter(own.ways), None)
+    nearest = hit(figure, own, way, wanted_level(figure), "estimate")
+    return Finding(key="no-hazard-ratio", facts=_facts_of((nearest,), shown), agrees=True)
+
+
+def _whole(
+    figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...], shown: Shown
+) -> Iterator[Finding]:
     top, *rest = _groups(hits)
     first = top[0]
-    facts = {**_facts(first, _methods(top)), **_own(figure, first, candidates), "coarse": int(_coarse(figure))}
+    facts = {**_facts_of(top, shown), **_own(figure, first, candidates), "coarse": int(_coarse(figure))}
     if figure.adjusted and first.at_level and first.place == 0:
         yield Finding(key="adjusted-is-crude", facts=facts)
         return
     if first.at_level:
         key = "other-analysis" if _otherwise(first) else WHOLE[first.place]
+        if key == "reproduced" and first.candidate.sign_alone:
+            key = "other-sign"
         yield Finding(key=key, facts=facts, agrees=first.place == 0)
     else:
         printed: Facts = {} if figure.level is None else {"printed_level": figure.level}
@@ -89,37 +110,54 @@ def _whole(figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candi
     if first.place or not first.at_level:
         whole = [group for group in rest if group[0].rank[0] <= 1]
         for group in whole[:_MOST_OTHERS]:
-            yield Finding(key="also-fits", facts=_facts(group[0], _methods(group)))
+            yield Finding(key="also-fits", facts=_facts_of(group))
 
 
 def _estimate_alone(
-    figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...], *, heavy: bool
+    figure: PrintedFigure, hits: tuple[Hit, ...], candidates: tuple[Candidate, ...], shown: Shown, *, heavy: bool
 ) -> Iterator[Finding]:
     first = hits[0]
     if figure.adjusted:
-        yield Finding(key="adjusted", facts=_facts(first, ""), agrees=True)
+        yield _adjusted(first)
         return
     miss = near_miss(figure, first.candidate, heavy=heavy)
     if miss is not None and first.place == 0:
         yield _missed(figure, first.candidate, miss)
         return
-    facts = {**_facts(first, first.match.method), **_own(figure, first, candidates)}
+    facts = {**_facts_of((first,), shown), **_own(figure, first, candidates), **_as_shown(figure, first, shown)}
     yield Finding(key="estimate-other-analysis" if _otherwise(first) else ESTIMATE[first.place], facts=facts)
 
 
-def _nothing_fits(figure: PrintedFigure, candidates: tuple[Candidate, ...], *, heavy: bool) -> Iterator[Finding]:
-    nearest = _nearest(figure, candidates)
+def _as_shown(figure: PrintedFigure, first: Hit, shown: Shown) -> Facts:
+    """The limits that the window shows of a match by another method."""
+    way = shown.way(first.candidate, wanted_level(figure))
+    if way is None or way.key == first.match.method:
+        return {}
+    own = hit(figure, first.candidate, way, wanted_level(figure), "estimate")
+    facts = _facts_of((own,))
+    return {f"shown_{name}": facts[name] for name in ("methods", "halved", "low", "high") if "low" in facts}
+
+
+def _nothing_fits(
+    figure: PrintedFigure, candidates: tuple[Candidate, ...], shown: Shown, *, heavy: bool
+) -> Iterator[Finding]:
+    nearest = _nearest(figure, candidates, shown)
     if figure.adjusted:
-        yield Finding(key="adjusted", facts=_facts(nearest, ""), agrees=True)
+        yield _adjusted(nearest)
         return
     near = _near(figure, candidates, heavy=heavy)
-    yield near or Finding(key="nearest", facts=_facts(nearest, nearest.match.method))
+    key = "nearest" if nearest.match.computed[0] is not None else "not-given"
+    yield near or Finding(key=key, facts=_facts_of((nearest,), shown))
+
+
+def _adjusted(crude: Hit) -> Finding:
+    return Finding(key="adjusted", facts={**_facts_of((crude,)), "methods": ""}, agrees=True)
 
 
 def _near(figure: PrintedFigure, candidates: tuple[Candidate, ...], *, heavy: bool) -> Finding | None:
     """A near miss of the print's own measure as read, where no estimate fits."""
     for candidate in candidates:
-        if candidate.heavy or not candidate.named or candidate.orientation != "as-read":
+        if candidate.heavy or not candidate.named or not candidate.as_printed:
             continue
         miss = near_miss(figure, candidate, heavy=heavy)
         if miss is not None:
@@ -131,25 +169,28 @@ def _interval_only(figure: PrintedFigure, hits: tuple[Hit, ...]) -> Finding:
     top = next(_groups(hits))
     estimate = top[0].match.computed[0]
     slip = estimate is not None and figure.estimate is not None and transposed(estimate, figure.estimate)
-    return Finding(key="interval-only", facts={**_facts(top[0], _methods(top)), "slip": int(slip)})
+    return Finding(key="interval-only", facts={**_facts_of(top), "slip": int(slip)})
 
 
 def _missed(figure: PrintedFigure, candidate: Candidate, miss: Miss) -> Finding:
-    way = miss.ways[0] if miss.ways else None
-    facts = _facts(
-        hit(figure, candidate, way, wanted_level(figure), "estimate"), " ".join(way.key for way in miss.ways)
-    )
+    facts = _facts_of([hit(figure, candidate, way, wanted_level(figure), "estimate") for way in miss.ways or (None,)])
     if miss.kind == "one-limit":
         facts |= {"limit": miss.limit, "slip": int(miss.slip)}
     return Finding(key=miss.kind, facts=facts)
 
 
-def _nearest(figure: PrintedFigure, candidates: tuple[Candidate, ...]) -> Hit:
-    """The figure's own measure as read, or the first that it may be, by the method that comes nearest."""
-    own = next((one for one in candidates if one.named and one.orientation == "as-read"), candidates[0])
+def _nearest(figure: PrintedFigure, candidates: tuple[Candidate, ...], shown: Shown) -> Hit:
+    """The figure's own measure, or the first that it may be, by the method shown, or else by that which comes nearest.
+
+    A difference is seen with the sign that is printed.
+    """
+    named = [one for one in candidates if one.named and one.as_printed]
+    own = min(named, key=lambda one: _other_sign(figure, one), default=candidates[0])
     way: Way | None = None
     if has_limits(figure):
-        way = nearest_way(figure, own, (way for way in own.ways if not way.heavy))
+        way = shown.way(own, wanted_level(figure))
+        if way is None or own.limits(way, wanted_level(figure)) is None:
+            way = nearest_way(figure, own, (way for way in own.ways if not way.heavy))
     return hit(figure, own, way, wanted_level(figure), "estimate")
 
 
@@ -162,17 +203,28 @@ def _groups(hits: Iterable[Hit]) -> Iterator[tuple[Hit, ...]]:
     return iter([tuple(group) for group in groups.values()])
 
 
-def _methods(group: tuple[Hit, ...]) -> str:
-    return " ".join(dict.fromkeys(one.match.method for one in group))
+def _other_sign(figure: PrintedFigure, candidate: Candidate) -> bool:
+    """Whether a difference has not the sign that is printed."""
+    printed, value = figure.estimate or figure.low, candidate.value()
+    return candidate.sign_alone is not (printed is not None and value is not None and printed.value * value > 0)
 
 
-def _facts(one: Hit, methods: str) -> Facts:
-    """A match as a sentence needs it; a number that is not there is left out."""
-    match = one.match
+def _facts_of(group: Sequence[Hit], shown: Shown | None = None) -> Facts:
+    """Matches that differ in the method alone, as a sentence needs them; a number that is not there is left out.
+
+    The method that the window shows stands first, and ``shown`` says so. ``halved`` is the method whose intervals
+    others fall back on where a count is 0.
+    """
+    one, match = group[0], group[0].match
+    way = None if shown is None else shown.way(one.candidate, match.level)
+    group = sorted(group, key=lambda hit: way is None or hit.match.method != way.key)
+    halved = {FALLBACKS[hit.match.method] for hit in group if hit.match.adjusted and hit.match.method in FALLBACKS}
     facts: Facts = {
         "measure": match.measure,
         "base": one.candidate.measure,
-        "methods": methods,
+        "methods": " ".join(dict.fromkeys(_key(hit) for hit in group)),
+        "halved": "".join(halved),
+        "shown": int(way is not None and group[0].match.method == way.key),
         "level": match.level,
         "orientation": match.orientation,
     }
@@ -182,9 +234,14 @@ def _facts(one: Hit, methods: str) -> Facts:
     return facts
 
 
+def _key(one: Hit) -> str:
+    """The method whose interval it is: Walter's or Gart's where a half was added because of a zero."""
+    return FALLBACKS.get(one.match.method, one.match.method) if one.match.adjusted else one.match.method
+
+
 def _coarse(figure: PrintedFigure) -> bool:
     """Whether the estimate has so few digits that much fits it by chance: a third of random prints with one decimal."""
-    return figure.estimate is not None and abs(last_digits(figure.estimate)) < _FEW_UNITS
+    return figure.estimate is not None and coarse(figure.estimate)
 
 
 def _otherwise(first: Hit) -> bool:

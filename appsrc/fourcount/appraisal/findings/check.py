@@ -19,7 +19,8 @@ class Match(msgspec.Struct, frozen=True, kw_only=True):
 
     ``measure`` and ``method`` are keys of the table of methods, ``level`` a fraction. ``computed`` holds estimate, low
     and high on the printed figure's own scale (points for a percentage), None where it has none. ``fit`` says whether
-    all that is printed was reproduced, the estimate alone, or the interval alone.
+    all that is printed was reproduced, the estimate alone, or the interval alone. ``adjusted`` names a correction that
+    the interval rests on, as an ``Interval`` does ("half").
     """
 
     measure: str
@@ -28,6 +29,7 @@ class Match(msgspec.Struct, frozen=True, kw_only=True):
     orientation: Orientation
     fit: Fit
     computed: tuple[float | None, float | None, float | None]
+    adjusted: str = ""
 
 
 class Finding(msgspec.Struct, frozen=True, kw_only=True):
