@@ -17,6 +17,7 @@ from dataclasses import dataclass
 
 import numpy as np
 
+from fourcount.stats import homogeneity
 from fourcount.stats import strata as pooled
 from fourcount.stats.results import Counts, Gap, HomogeneityTest, Interval
 
@@ -128,8 +129,8 @@ def main() -> None:
         for key, test, odds_ratio in (
             ("cmh", pooled.cochran_mantel_haenszel, 1.0),
             ("cmh-corrected", pooled.cochran_mantel_haenszel_corrected, 1.0),
-            ("breslow-day", pooled.breslow_day, 3.0),
-            ("breslow-day-tarone", pooled.breslow_day_tarone, 3.0),
+            ("breslow-day", homogeneity.breslow_day, 3.0),
+            ("breslow-day-tarone", homogeneity.breslow_day_tarone, 3.0),
         ):
             found, none = error(design, test, odds_ratio, sets)
             print(f"{design.title:28} {key:48}{odds_ratio:4} {found:7.4f} {none:6.1%}")

@@ -9,7 +9,7 @@ from types import ModuleType
 
 import pytest
 
-from fourcount.stats import strata
+from fourcount.stats import homogeneity, strata
 
 
 def _load() -> ModuleType:
@@ -51,7 +51,7 @@ def test_sato_s_variance_holds_in_many_small_strata_where_greenland_and_robins_s
 
 def test_breslow_and_day_err_in_strata_of_three_people() -> None:
     """In large strata about 5% of sets with one odds ratio fall below 0.05; in strata of 1 v 2 more than a third."""
-    for test in (strata.breslow_day, strata.breslow_day_tarone):
+    for test in (homogeneity.breslow_day, homogeneity.breslow_day_tarone):
         assert 0.03 < simulation.error(LARGE, test, 3.0, SETS)[0] < 0.08
         assert simulation.error(MATCHED, test, 3.0, SETS)[0] > 1 / 3
 

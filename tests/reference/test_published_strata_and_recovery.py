@@ -15,6 +15,7 @@ from typing import Any
 import pytest
 
 from fourcount.stats import interaction, recovery, strata
+from fourcount.stats.homogeneity import breslow_day
 from fourcount.stats.normal import quantile, z_of_p
 from fourcount.stats.results import Counts, Gap, HomogeneityTest, Interval
 from tables import counts_of
@@ -50,7 +51,7 @@ def _odds_ratio(entry: dict[str, Any]) -> Figures:
         "p_corrected": p,
         "chi_square_corrected": NormalDist().inv_cdf(p / 2) ** 2,  # the test answers in p
     }
-    homogeneity = strata.breslow_day(tables)
+    homogeneity = breslow_day(tables)
     if isinstance(homogeneity, HomogeneityTest):
         found |= {"breslow_day": homogeneity.chi_square, "breslow_day_p": homogeneity.p}
     return found

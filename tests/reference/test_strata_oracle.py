@@ -15,6 +15,7 @@ from mpmath import mpf
 from statsmodels.stats.contingency_tables import StratifiedTable
 
 import strata_digits as digits
+from fourcount.stats import homogeneity
 from fourcount.stats import strata as ours
 from fourcount.stats.results import Counts, Gap, HomogeneityTest, Interval
 from tables import counts_of
@@ -127,7 +128,7 @@ def test_the_tests_of_no_association_have_every_digit(correction: float) -> None
 @pytest.mark.parametrize("tarone", [False, True])
 def test_the_tests_of_one_odds_ratio_have_every_digit(tarone: bool) -> None:
     """Breslow and Day's chi-square agrees with 90 digits to 1e-9, and its p wherever a double holds it."""
-    test = ours.breslow_day_tarone if tarone else ours.breslow_day
+    test = homogeneity.breslow_day_tarone if tarone else homogeneity.breslow_day
     given = 0
     for strata in CASES:
         found = test([counts_of(t) for t in strata])
@@ -198,7 +199,7 @@ def _homogeneity_agrees(strata: Sequence[Stratum], counts: Sequence[Counts]) -> 
         return False
     if not math.isfinite(plain.statistic):
         return False
-    found, corrected = ours.breslow_day(counts), ours.breslow_day_tarone(counts)
+    found, corrected = homogeneity.breslow_day(counts), homogeneity.breslow_day_tarone(counts)
     assert isinstance(found, HomogeneityTest), strata
     assert isinstance(corrected, HomogeneityTest), strata
     assert found.chi_square == pytest.approx(plain.statistic, rel=1e-6, abs=1e-6), strata

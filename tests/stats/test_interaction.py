@@ -8,6 +8,7 @@ import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
+from fourcount.stats.homogeneity import breslow_day
 from fourcount.stats.interaction import (
     Estimate,
     Interaction,
@@ -17,7 +18,6 @@ from fourcount.stats.interaction import (
 from fourcount.stats.normal import quantile, two_sided_p
 from fourcount.stats.odds import woolf
 from fourcount.stats.results import Gap, HomogeneityTest
-from fourcount.stats.strata import breslow_day
 from tables import LEVELS, counts_of, given_interval
 
 LEVEL = st.sampled_from(LEVELS)

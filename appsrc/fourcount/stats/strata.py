@@ -11,25 +11,10 @@ from __future__ import annotations
 import math
 from collections.abc import Sequence
 
-from fourcount.stats.homogeneity import breslow_day, breslow_day_tarone
 from fourcount.stats.log_scale import limits_around
 from fourcount.stats.normal import quantile, two_sided_p
 from fourcount.stats.results import Counts, Gap, Interval
 from fourcount.stats.strata_sums import cross_products, excess, informative, nothing_to_compare, with_both_groups
-
-__all__ = [
-    "breslow_day",
-    "breslow_day_tarone",
-    "cochran_mantel_haenszel",
-    "cochran_mantel_haenszel_corrected",
-    "greenland_robins_difference",
-    "greenland_robins_ratio",
-    "pooled_odds_ratio",
-    "pooled_risk_difference",
-    "pooled_risk_ratio",
-    "robins_breslow_greenland",
-    "sato_difference",
-]
 
 
 def pooled_odds_ratio(strata: Sequence[Counts]) -> float | Gap:

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.stats import strata
+from fourcount.stats import homogeneity, strata
 from fourcount.stats.entries.entry import HomogeneityEntry, Method, Test
 
 _ALL_FAMILIES = "Asymptotic; every family pools alike."
@@ -93,7 +93,7 @@ HOMOGENEITY_TESTS = (
             "A stratum without events, or with nothing else, is not counted. In strata of a few people it finds "
             "differences that are not there, and in few strata it overlooks large ones."
         ),
-        test=strata.breslow_day,
+        test=homogeneity.breslow_day,
     ),
     HomogeneityEntry(
         key="breslow-day-tarone",
@@ -104,6 +104,6 @@ HOMOGENEITY_TESTS = (
             "Takes off what the pooled odds ratio, which is not the likeliest one, adds. In strata of a few people it "
             "finds differences that are not there."
         ),
-        test=strata.breslow_day_tarone,
+        test=homogeneity.breslow_day_tarone,
     ),
 )
