@@ -8,12 +8,12 @@ from math import isinf
 
 import msgspec
 
+from fourcount.record.entry.figure_found import Figure
 from fourcount.record.entry.figure_names import ADJUSTED, Name, name_at
-from fourcount.record.entry.p_values import FoundP, Relation, p_at, statistic_at
-from fourcount.record.entry.readings import PrintedMeasure, PrintedNumber, PrintedUnit
+from fourcount.record.entry.p_values import FoundP, p_at, statistic_at
+from fourcount.record.entry.readings import PrintedNumber
 from fourcount.record.entry.tokens import Token
 from fourcount.record.entry.word_list import words
-from fourcount.record.outcome import PaperMeasure
 
 _OPENING = ("(", "[", "{")
 _CLOSING = (")", "]", "}")
@@ -48,52 +48,6 @@ _ENDLESS = ("inf", "infinity", "infinite", "nan")
 _EXPONENT = re.compile("e[0-9]+|e-[0-9]+")
 
 
-class Figure:
-    """One result while it is read: places of its tokens and what was found between them."""
-
-    def __init__(self, first: int, name: Name | None) -> None:
-        self.first = first
-        self.after = first
-        self.name = name
-        self.estimate: PrintedNumber | None = None
-        self.low: PrintedNumber | None = None
-        self.high: PrintedNumber | None = None
-        self.level: float | None = None
-        self.p: PrintedNumber | None = None
-        self.p_relation: Relation = "="
-        self.unit: PrintedUnit = "one"
-        self.one_limit = ""
-
-    @property
-    def named(self) -> bool:
-        return self.name is not None
-
-    @property
-    def adjusted(self) -> bool:
-        return self.name is not None and self.name.adjusted
-
-    @property
-    def bare(self) -> bool:
-        """Whether it is a number alone, which is a result only where nothing stands before it."""
-        alone = self.name is None and self.low is None and self.p is None and self.unit == "one"
-        return alone and self.estimate is not None and self.estimate.value >= 0
-
-    def measure_or(self, usual: PaperMeasure) -> PrintedMeasure | None:
-        """What the figure is of, if one without a name is of ``usual``; None for what no count gives."""
-        if self.estimate is None:
-            return "p"
-        percent = self.unit == "percent"
-        if self.name is None:
-            if self.unit == "per-1000":
-                return usual if usual.endswith("difference") else "risk_difference"
-            if not percent or usual.endswith("difference"):
-                return usual
-            return "risk_difference" if self.estimate.value < 0 or self.low else "risk"
-        if self.name.vague and not (percent or self.unit == "per-1000" or usual.endswith("difference")):
-            return None
-        return self.name.measure
-
-
 class Grammar:
     """A reader of results over tokens; ``leftover`` are the numbers that it took for nothing."""
 
@@ -101,8 +55,6 @@ class Grammar:
         self.tokens = tokens
         self.unnamed = unnamed
         self.leftover: list[Token] = []
-        self.decimals = [token.text for token in tokens if token.decimals]
-        self.commas = all("," in text for text in self.decimals)
 
     def figures(self) -> list[Figure]:
         """All results in reading order. Every step goes forward, so the work is linear in the text."""
@@ -191,6 +143,7 @@ class Grammar:
     def _figure(self, place: int, name: tuple[int, Name] | None) -> Figure:
         figure = Figure(name[0] if name else place, name[1] if name else None)
         token = self.tokens[place]
+        figure.commas = self._commas(place)
         figure.estimate = self._printed(figure, token)
         figure.unit = "percent" if token.percent else "one"
         place = self._unit(figure, place + 1)
@@ -217,10 +170,22 @@ class Grammar:
         self._close(figure)
         return figure
 
+    def _commas(self, place: int) -> int:
+        """0 where a number near a place, before any p, has a decimal point; 2 where one has a decimal comma; else 1."""
+        found = 1
+        for step, token in enumerate(self.tokens[place : place + _LONGEST_WAY], place):
+            if token.lower in ("p", "p-value") or token.text == ";":
+                break
+            if token.decimals and not self.level_at(step):
+                if "," not in token.text:
+                    return 0
+                found = 2
+        return found
+
     def _printed(self, figure: Figure, token: Token) -> PrintedNumber:
         """A number of a figure; in a ratio a comma is a decimal one, as no ratio is printed with thousands."""
         ratio = figure.name is not None and figure.name.measure is not None and figure.name.measure.endswith("ratio")
-        if not self.commas or not (ratio or self.decimals) or token.decimals or token.text.count(",") != 1:
+        if not figure.commas or token.decimals or token.text.count(",") != 1 or not (ratio or figure.commas > 1):
             return printed_number(token)
         head, _, digits = token.text.partition(",")
         return PrintedNumber(text=token.text, value=float(f"{head}.{digits}"), decimals=len(digits))

@@ -5,7 +5,8 @@ from __future__ import annotations
 from collections.abc import Sequence
 
 from fourcount.record.entry.digits import specimen
-from fourcount.record.entry.figure_grammar import Figure, Grammar
+from fourcount.record.entry.figure_found import Figure
+from fourcount.record.entry.figure_grammar import Grammar
 from fourcount.record.entry.readings import Fact, Mark, PaperReading, PrintedFigure, PrintedUnit
 from fourcount.record.entry.tokens import LONGEST_TEXT, Print, take_apart
 from fourcount.record.outcome import PaperMeasure
