@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Mapping
 from typing import Any
 
-from fourcount.appraisal.clusters import clusters_of
+from fourcount.appraisal.clusters import ReadClusters, clusters_of
 from fourcount.appraisal.discordant import pairs_as_typed
 from fourcount.appraisal.findings import (
     Counts,
@@ -55,10 +55,11 @@ def every_interval(outcome: Outcome, findings: OutcomeFindings, level: float) ->
     """
     given, clusters = findings.given, clusters_of(outcome)
     if isinstance(given, Counts):
-        without = clusters.elsewhere if findings.form == "strata" else None
-        behind = without or clusters.behind(given) or given
+        behind, without = _behind(given, clusters)
+        if findings.form == "strata":
+            behind, without = given, clusters.elsewhere
         withheld = support_of(outcome).withheld
-        crude = _every(METHODS, _of_counts(given if isinstance(behind, Gap) else behind), withheld, level, behind)
+        crude = _every(METHODS, _of_counts(behind), withheld, level, without)
         return {**crude, **_pooled(findings, withheld, level, without)}
     pairs = pairs_as_typed(outcome, findings)
     if pairs is not None:
@@ -80,12 +81,19 @@ def every_p(outcome: Outcome, findings: OutcomeFindings) -> dict[str, float | Ga
         counts = tuple(stratum.counts for stratum in findings.strata.strata)
         return _every_test(STRATA_TESTS, counts, clusters.elsewhere)
     if isinstance(given, Counts):
-        behind = clusters.behind(given) or given
-        return _every_test(TESTS, given if isinstance(behind, Gap) else behind, behind)
+        return _every_test(TESTS, *_behind(given, clusters))
     pairs = pairs_as_typed(outcome, findings)
     if pairs is not None:
         return _every_test(PAIR_TESTS, pairs, clusters.elsewhere)
     return _every_test(RATE_TESTS, given, clusters.elsewhere) if isinstance(given, Rates) else {}
+
+
+def _behind(counts: Counts, clusters: ReadClusters) -> tuple[FractionalCounts, Gap | None]:
+    """The counts that methods take, divided by a design effect where there is one, or why they give nothing."""
+    behind = clusters.behind(counts)
+    if isinstance(behind, Gap):
+        return counts, behind
+    return (counts if behind is None else behind), None
 
 
 def conditional_odds_ratio(counts: Counts) -> float | Gap:
@@ -96,7 +104,7 @@ def conditional_odds_ratio(counts: Counts) -> float | Gap:
 
 
 def _every(
-    methods: tuple[Method, ...], arguments: Arguments, withheld: Withheld, level: float, without: object
+    methods: tuple[Method, ...], arguments: Arguments, withheld: Withheld, level: float, without: Gap | None
 ) -> dict[str, Intervals]:
     return {
         measure: {
@@ -109,20 +117,20 @@ def _every(
 
 
 def _interval(
-    method: Method, values: tuple[Any, ...], withheld: str | None, level: float, without: object
+    method: Method, values: tuple[Any, ...], withheld: str | None, level: float, without: Gap | None
 ) -> Interval | Gap:
     if withheld is not None:
         return Gap(withheld)
-    if isinstance(without, Gap):
+    if without is not None:
         return without
     interval = method.interval(*values, level)
     return Gap("cluster-no-exact") if isinstance(interval, Gap) and interval.key == "not-whole" else interval
 
 
-def _every_test(tests: tuple[Test, ...], counts: Any, without: object) -> dict[str, float | Gap]:
+def _every_test(tests: tuple[Test, ...], counts: Any, without: Gap | None) -> dict[str, float | Gap]:
     found: dict[str, float | Gap] = {}
     for test in tests:
-        p = without if isinstance(without, Gap) else test.p(counts)
+        p = test.p(counts) if without is None else without
         found[test.key] = Gap("cluster-no-exact") if isinstance(p, Gap) and p.key == "not-whole" else p
     return found
 

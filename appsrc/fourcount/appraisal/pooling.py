@@ -51,33 +51,33 @@ _ESTIMATES: dict[str, Callable[[Sequence[Counts]], float | Gap]] = {
 
 
 def pooled_figures(
-    strata: Sequence[Counts], level: float, support: Support, *, without: object = None
+    strata: Sequence[Counts], level: float, support: Support, *, without: Gap | None = None
 ) -> dict[str, Figure | Gap]:
     """The Mantel-Haenszel measures that the design supports; ``without`` is the reason for no intervals, if any."""
     return {key: _pooled(key, strata, level, support, without) for key in POOLED_MEASURES}
 
 
-def _pooled(key: str, strata: Sequence[Counts], level: float, support: Support, without: object) -> Figure | Gap:
+def _pooled(key: str, strata: Sequence[Counts], level: float, support: Support, without: Gap | None) -> Figure | Gap:
     crude = key.removeprefix("pooled_")
     if crude in support.withheld:
         return Gap(support.withheld[crude])
     name = POOLED_METHODS[key]
     estimate = _ESTIMATES[key](strata)
     interval: Interval | Gap
-    interval = without if isinstance(without, Gap) else method(key, name).interval(strata, level)
+    interval = method(key, name).interval(strata, level) if without is None else without
     if isinstance(estimate, Gap) and isinstance(interval, Gap):
         return estimate
     return Figure(estimate=estimate, interval=interval, method=name)
 
 
-def cmh(strata: Sequence[Counts], *, without: object = None) -> Probability:
+def cmh(strata: Sequence[Counts], *, without: Gap | None = None) -> Probability:
     """The p of no association within the strata."""
-    return Probability(p=without if isinstance(without, Gap) else test(TEST).p(strata), method=TEST)
+    return Probability(p=test(TEST).p(strata) if without is None else without, method=TEST)
 
 
-def homogeneity(strata: Sequence[Counts], *, without: object = None) -> Homogeneity | Gap:
+def homogeneity(strata: Sequence[Counts], *, without: Gap | None = None) -> Homogeneity | Gap:
     """Whether one odds ratio may hold in all strata, by Breslow and Day's test with Tarone's correction."""
-    if isinstance(without, Gap):
+    if without is not None:
         return without
     found = homogeneity_test(HOMOGENEITY).test(strata)
     if isinstance(found, Gap):
@@ -86,13 +86,13 @@ def homogeneity(strata: Sequence[Counts], *, without: object = None) -> Homogene
 
 
 def interactions(
-    strata: Sequence[Counts], level: float, support: Support, *, without: object = None
+    strata: Sequence[Counts], level: float, support: Support, *, without: Gap | None = None
 ) -> dict[str, Interaction | Gap]:
     """The first of two strata against the second, measure by measure; nothing of one stratum, or of more than two."""
     if len(strata) != SET_AGAINST_EACH_OTHER:
         return {}
     return {
-        key: without if isinstance(without, Gap) else _interaction(key, strata, level)
+        key: _interaction(key, strata, level) if without is None else without
         for key in POOLED_MEASURES
         if key.removeprefix("pooled_") not in support.withheld
     }

@@ -24,10 +24,11 @@ from fourcount.appraisal.findings import (
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import Support, support_of
-from fourcount.appraisal.measures import Table, all_figures, measures, own_test
+from fourcount.appraisal.measures import Table, all_figures, measures, number_needed_from, own_test
 from fourcount.appraisal.patient import carry_effect
 from fourcount.appraisal.pooling import cmh, homogeneity, interactions, parting, pooled_figures
 from fourcount.appraisal.postponing import NOTHING, Pace, postponed
+from fourcount.appraisal.reach import within_everybody
 from fourcount.appraisal.starting_risk import StartingRisk, Typed, marks_of, typed_risk
 from fourcount.appraisal.table import oriented, totals_of
 from fourcount.record.entry.readings import GroupCounts, Proportion, StratumReading, TableReading, Unreadable
@@ -40,7 +41,10 @@ WITHIN = ("risk_index", "risk_reference", "risk_difference", "risk_ratio", "odds
 
 
 def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
-    """Crude measures of all strata together beside the pooled ones; blank rows are left out."""
+    """Crude measures of all strata together beside the pooled ones; blank rows are left out.
+
+    The number needed is that of the pooled difference: the crude one may point the other way.
+    """
     readings = read_strata(outcome.table) if isinstance(outcome.table, Strata) else ()
     typed, clusters, adjusted = typed_risk(outcome), clusters_of(outcome), adjusted_of(outcome)
     marks = tuple(mark for reading in readings for mark in reading.marks)
@@ -55,7 +59,7 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     later = postponed(counts, choices, pace.loaded) if pace.deferring else NOTHING
     table = Table(counts=counts, choices=choices, postponed=later, behind=clusters.elsewhere)
     crude = all_figures(table, support)
-    parts = _strata(strata, labels, table, crude, support)
+    parts = _strata(strata, labels, table, crude, support, clusters.elsewhere)
     pooled = {} if isinstance(parts, Gap) else _given(parts)
     conversion, patient = _for_a_patient(pooled, outcome, support, typed)
     case = Case(
@@ -71,7 +75,20 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         extras=_extras(pooled, outcome, counts, adjusted, clusters),
         strata=parts,
     )
-    return whole(case, measures(crude, support, welcome=outcome.welcome), totals)
+    return whole(case, _measures(crude, parts, support, outcome), totals)
+
+
+def _measures(
+    crude: dict[str, Figure], strata: StrataFindings | Gap, support: Support, outcome: Outcome
+) -> dict[str, Measure]:
+    found = measures(crude, support, welcome=outcome.welcome)
+    if isinstance(found["number_needed"], Gap) or isinstance(strata, Gap):
+        return found
+    pooled = strata.pooled["pooled_risk_difference"]
+    if isinstance(pooled, Gap):
+        return {**found, "number_needed": pooled}
+    needed = number_needed_from(within_everybody(pooled), welcome=outcome.welcome)
+    return {**found, "number_needed": needed}
 
 
 def _extras(
@@ -120,21 +137,26 @@ def _sum_of(groups: list[GroupCounts]) -> GroupCounts:
 
 
 def _strata(
-    strata: tuple[Counts, ...], labels: list[str], table: Table, crude: dict[str, Figure], support: Support
+    strata: tuple[Counts, ...],
+    labels: list[str],
+    table: Table,
+    crude: dict[str, Figure],
+    support: Support,
+    without: Gap | None,
 ) -> StrataFindings | Gap:
     if support.refused:
         return Gap(support.refused)
-    pooled = pooled_figures(strata, table.choices.level, support, without=table.behind)
+    pooled = pooled_figures(strata, table.choices.level, support, without=without)
     return StrataFindings(
         strata=tuple(
             StratumFindings(label=label, counts=counts, measures=_within(replace(table, counts=counts), support))
             for label, counts in zip(labels, strata, strict=True)
         ),
         pooled=pooled,
-        test=cmh(strata, without=table.behind),
-        homogeneity=homogeneity(strata, without=table.behind),
+        test=cmh(strata, without=without),
+        homogeneity=homogeneity(strata, without=without),
         parting=parting(crude, pooled),
-        interactions=interactions(strata, table.choices.level, support, without=table.behind),
+        interactions=interactions(strata, table.choices.level, support, without=without),
     )
 
 
