@@ -23,7 +23,7 @@ class Figure:
         self.p_relation: Relation = "="
         self.unit: PrintedUnit = "one"
         self.one_limit = ""
-        self.commas = 0
+        self.start = first
 
     @property
     def named(self) -> bool:

@@ -143,7 +143,7 @@ class Grammar:
     def _figure(self, place: int, name: tuple[int, Name] | None) -> Figure:
         figure = Figure(name[0] if name else place, name[1] if name else None)
         token = self.tokens[place]
-        figure.commas = self._commas(place)
+        figure.start = place
         figure.estimate = self._printed(figure, token)
         figure.unit = "percent" if token.percent else "one"
         place = self._unit(figure, place + 1)
@@ -184,8 +184,11 @@ class Grammar:
 
     def _printed(self, figure: Figure, token: Token) -> PrintedNumber:
         """A number of a figure; in a ratio a comma is a decimal one, as no ratio is printed with thousands."""
+        if token.decimals or token.text.count(",") != 1:
+            return printed_number(token)
         ratio = figure.name is not None and figure.name.measure is not None and figure.name.measure.endswith("ratio")
-        if not figure.commas or token.decimals or token.text.count(",") != 1 or not (ratio or figure.commas > 1):
+        commas = self._commas(figure.start)
+        if not commas or not (ratio or commas > 1):
             return printed_number(token)
         head, _, digits = token.text.partition(",")
         return PrintedNumber(text=token.text, value=float(f"{head}.{digits}"), decimals=len(digits))

@@ -16,7 +16,7 @@ __all__ = ["PASTE_DOUBTS", "read_paste"]
 
 _WORD = re.compile(r"[^\W\d_]{2,}")
 _NUMBER = re.compile(r"[0-9]+(?:[.,\u00b7][0-9]+)*")
-_POINT = re.compile(r"[0-9]+(?:\.[0-9]+)+")
+_POINT = re.compile(r"(?<![0-9])[0-9]+(?:\.[0-9]+)+")
 _POINT_THOUSANDS = re.compile(r"(?<![0-9.,])[1-9][0-9]{0,2}(?:\.[0-9]{3})+(?![0-9.])")
 _DECIMAL_COMMA = re.compile(r"[0-9],[0-9]+ ?%")
 _BORDER = re.compile(r"\t|\||[^\s] {3,}[^\s]")

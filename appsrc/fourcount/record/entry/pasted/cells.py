@@ -73,6 +73,13 @@ def delimited_cell(text: str) -> list[Cell]:
     if not tokens or text.casefold().strip() in _BLANKS or not any(_tells(token) for token in tokens):
         return [Cell(text=text)]
     numbers = sum(token.kind == "number" for token in tokens)
+    if (
+        len(tokens) == numbers == 1
+        and tokens[0].whole is not None
+        and not tokens[0].percent
+        and tokens[0].text[0].isdigit()
+    ):
+        return [Cell(text=tokens[0].text, quantity=Phrases(tokens, bare=True).quantity_at(0))]
     compound = len(tokens) > 2 and tokens[1].text == "-" and tokens[2].kind == "word"
     named = compound or (tokens[0].kind == "word" and (tokens[0].lower not in ("n", "p") or not numbers))
     bound = tokens[0].text in ("<", ">") and any(token.value > 1 for token in tokens)

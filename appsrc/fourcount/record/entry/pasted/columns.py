@@ -59,8 +59,7 @@ def with_risks(matrix: Matrix) -> Matrix:
             told = next((each.label for each in (head, label) if role_of(each.label) == "percent"), None)
             risk = rows[row][column].risk
             counted = rows[row][column].counted
-            wholes = [head.total, label.total, *(cell.count for cell in (*matrix.rows[row], *turned.rows[column]))]
-            if counted and any(whole and _is_of(counted, whole) for whole in wholes):
+            if counted and _is_of_any(counted, [head.total, label.total], (*matrix.rows[row], *turned.rows[column])):
                 rows[row][column] = Cell(text=rows[row][column].text, quantity=counted)
             elif told is not None and risk:
                 level = _LEVEL.search(told)
@@ -69,9 +68,13 @@ def with_risks(matrix: Matrix) -> Matrix:
     return msgspec.structs.replace(matrix, rows=tuple(tuple(row) for row in rows))
 
 
-def _is_of(quantity: Quantity, total: Token) -> bool:
+def _is_of_any(quantity: Quantity, totals: Sequence[Token | None], cells: Sequence[Cell]) -> bool:
+    """Whether a count and its percentage are proven by a total in a heading or in a cell beside."""
     events, percent = quantity.events, quantity.percent
-    return events is not None and percent is not None and gives(percent, events.whole or 0, total.whole or 0)
+    if events is None or percent is None:
+        return False
+    wholes = [whole for whole in (*totals, *(cell.count for cell in cells)) if whole]
+    return any(gives(percent, events.whole or 0, whole.whole or 0) for whole in wholes)
 
 
 def _is_result(matrix: Matrix, column: int) -> bool:

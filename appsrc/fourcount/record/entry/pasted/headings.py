@@ -39,7 +39,8 @@ _TOTAL = frozenset(
 _OTHERS = frozenset(
     words(
         "no not non without survived survivors survivor alive negative absent absence unaffected event-free well none "
-        "nonevents non-events non-event never - failure-free relapse-free disease-free non-responders nonresponders non-cases noncases remaining others living uninfected stable healthy"
+        "nonevents non-events non-event never - failure-free remaining others living uninfected stable healthy "
+        "relapse-free disease-free non-responders nonresponders non-cases noncases"
     )
 )
 _EVENTS = frozenset(

@@ -76,6 +76,8 @@ class Phrases:
     def _of_no_people(self, place: int) -> bool:
         """Whether the nouns behind a number say that it counts hours, doses and the like ("38 hours of 40")."""
         after = self._nouns(place, 3)
+        if after == place:
+            return False
         said = [self.at(step).lower for step in range(place, after + 1)]
         timed = any(time_of_people(one, two) for one, two in pairwise(said))
         return not timed and any(noun in TIME_UNITS or noun in NOT_COUNTED for noun in said[:-1])
