@@ -8,7 +8,7 @@ from __future__ import annotations
 
 import math
 
-from fourcount.stats import difference, odds, ratio, risk
+from fourcount.stats import difference, risk
 from fourcount.stats.estimates import odds_ratio, risk_ratio, without_a_contrast, without_people
 from fourcount.stats.log_scale import exponential
 from fourcount.stats.normal import quantile, two_sided_p
@@ -109,7 +109,3 @@ def _chi(counts: FractionalCounts, weight: float, correction: float) -> float:
     across = counts.index_events * counts.reference_non_events - counts.index_non_events * counts.reference_events
     margins = counts.index_total * counts.reference_total * counts.events * counts.non_events
     return max(abs(across) - correction, 0.0) * math.sqrt(weight / margins) if margins else 0.0
-
-
-MEE, NEWCOMBE_CONTINUITY = difference.mee, difference.newcombe_continuity
-CORNFIELD, WALTER = odds.cornfield, ratio.walter

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.stats import print_only
+from fourcount.stats import difference, odds, print_only, ratio
 from fourcount.stats.entries.entry import Method, Test
 
 PRINT_METHODS: tuple[Method, ...] = (
@@ -27,7 +27,7 @@ PRINT_METHODS: tuple[Method, ...] = (
     Method(
         key="mee",
         measure="risk_difference",
-        interval=print_only.MEE,
+        interval=difference.mee,
         title="Mee score",
         formula="Miettinen and Nurminen’s interval without the factor N/(N−1)",
         source="Mee 1984; Newcombe 1998, Stat Med 17:873, method 5",
@@ -36,7 +36,7 @@ PRINT_METHODS: tuple[Method, ...] = (
     Method(
         key="newcombe-continuity",
         measure="risk_difference",
-        interval=print_only.NEWCOMBE_CONTINUITY,
+        interval=difference.newcombe_continuity,
         title="Newcombe hybrid score with continuity correction",
         formula="Newcombe’s interval from Wilson limits with a correction for continuity",
         source="Newcombe 1998, Stat Med 17:873, method 11",
@@ -45,7 +45,7 @@ PRINT_METHODS: tuple[Method, ...] = (
     Method(
         key="walter",
         measure="risk_ratio",
-        interval=print_only.WALTER,
+        interval=ratio.walter,
         title="Walter adjusted log",
         formula="Katz’s interval with 1/2 added to the events and to the people of each group, centre included",
         source="Walter 1975",
@@ -63,7 +63,7 @@ PRINT_METHODS: tuple[Method, ...] = (
     Method(
         key="cornfield",
         measure="odds_ratio",
-        interval=print_only.CORNFIELD,
+        interval=odds.cornfield,
         title="Cornfield score",
         formula="Miettinen and Nurminen’s interval without the factor N/(N−1)",
         source="Cornfield 1956, without correction for continuity",
