@@ -9,6 +9,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.record.paper import Choices
 from fourcount.wording.form import level_of
 from fourcount.wording.lines import KINDS, measure_lines
+from fourcount.wording.sentence import headline
 
 
 def lines_of(outcome, choices=None):
@@ -137,7 +138,7 @@ def test_a_printed_risk_without_limits_still_says_its_difference():
             effect_only("odds_ratio", adjusted_for_text="age and sex"),
             ("Odds ratio", "as printed, adjusted for age and sex", "0.72", "0.55 to 0.92"),
         ),
-        (effect_only("risk_ratio", "1.5"), ("Risk ratio", "as printed", "1.50", "not printed")),
+        (effect_only("risk_ratio", "1.5"), ("Risk ratio", "as printed", "1.5", "not printed")),
         (
             effect_only("risk_difference", "-7.9% (-12.6 to -3.3)"),
             ("Risk difference", "per 100, as printed", "7.9 fewer", "3.3 to 12.6"),
@@ -149,6 +150,50 @@ def test_a_printed_risk_without_limits_still_says_its_difference():
 def test_a_printed_effect_is_the_only_line(outcome, line):
     """With its own limits, and for what it was adjusted."""
     assert texts(outcome) == [line]
+
+
+@pytest.mark.parametrize(
+    ("outcome", "estimate", "interval"),
+    [
+        (effect_only("odds_ratio", "9.7 (2.9 to 31.7)"), "9.7", "2.9 to 31.7"),
+        (effect_only("odds_ratio", "12 (0.8 to 170)"), "12", "0.8 to 170"),
+        (effect_only("risk_ratio", "0·540 (0·37–0·8)"), "0.540", "0.37 to 0.8"),
+        (effect_only("risk_ratio", "0.5 (0.4 to 0.8)", index_group="second"), "2.00", "1.25 to 2.50"),
+        (effect_only("risk_difference", "-8% (-13 to 3)"), "8 fewer", "13 fewer to 3 more"),
+        (effect_only("risk_difference", "-0.079 (-0.126 to -0.033)"), "7.9 fewer", "3.3 to 12.6"),
+        (effect_only("risk_ratio", "1.5, p = 0.03"), "1.5", "1.04 to 2.16"),
+    ],
+)
+def test_what_only_the_print_gives_has_its_digits(outcome, estimate, interval):
+    """No zero that the paper does not have; what is turned round or rebuilt is ours, and has our digits."""
+    line = next(iter(lines_of(outcome).values()))
+    assert (line.estimate, line.interval) == (estimate, interval)
+    if "second" not in outcome.index_group and "rebuilt" not in line.note:
+        findings = appraise(outcome, Choices())
+        assert f"{estimate} " in headline(outcome, findings, Choices())
+        assert interval in headline(outcome, findings, Choices())
+
+
+@pytest.mark.parametrize(
+    ("texts_", "estimate", "interval"),
+    [
+        (("9%", "6 to 12", "17%", "13 to 21"), "17%", "13 to 21%"),
+        (("9%", "6 to 12", "17.0%", "13 to 21.5"), "17.0%", "13 to 21.5%"),
+        (("9 (6-12)", "", "17 (13-21)", ""), "17%", "13 to 21%"),
+    ],
+)
+def test_a_printed_risk_has_the_digits_of_its_print(texts_, estimate, interval):
+    """And so has the risk of the other outcome, which it leaves."""
+    line = lines_of(at_time(texts_))["risk_reference"]
+    assert (line.estimate, line.interval) == (estimate, interval)
+    other = lines_of(at_time(("9%", "6 to 12", "17%", "13 to 21"), counted="right"))["risk_reference"]
+    assert (other.estimate, other.interval) == ("83%", "79 to 87%")
+
+
+def test_a_missing_time_span_is_said_once():
+    """Beside the number needed, which has no meaning without one."""
+    details = [line.detail for line in lines_of(at_time(span_text="")).values()]
+    assert sum("time span not given" in detail for detail in details) == 1
 
 
 def test_an_interval_rebuilt_from_a_p_says_so():
@@ -172,12 +217,12 @@ def test_pooled_stands_before_crude_and_strata_under_the_fold():
     """Measure by measure; each stratum has its counts, its ratio and its difference in one line."""
     lines = lines_of(strata())
     assert list(lines) == [
-        "pooled_risk_difference", "risk_difference", "number_needed", "risk_reference", "risk_index",
+        "pooled_risk_difference", "number_needed", "risk_difference", "risk_reference", "risk_index",
         "pooled_risk_ratio", "risk_ratio", "pooled_odds_ratio", "odds_ratio", "stratum.0", "stratum.1",
     ]  # fmt: skip
     assert (lines["pooled_risk_ratio"].name, lines["pooled_risk_ratio"].estimate) == ("Risk ratio, pooled", "0.55")
     assert (lines["risk_ratio"].name, lines["risk_ratio"].estimate) == ("Risk ratio, crude", "0.54")
-    assert lines["number_needed"].name == "NNTB, crude"
+    assert lines["number_needed"].name == "NNTB, pooled"
     stratum = lines["stratum.0"]
     assert (stratum.name, stratum.detail) == ("under 65, risk ratio", "10 of 200 against 22 of 190")
     assert stratum.note == "difference 6.6 fewer per 100 (1.2 to 12.5)"

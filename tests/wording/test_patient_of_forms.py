@@ -72,3 +72,11 @@ def test_printed_risks_are_carried_as_they_stand():
     words = words_of(at_time(level="90%"))
     assert (words.without_count, words.with_count) == ("17 in 100", "9 in 100")
     assert words.summary.endswith("90% interval 3 to 13")
+
+
+def test_a_printed_effect_is_carried_in_the_digits_of_its_print():
+    """What everything rests on is named as the paper prints it."""
+    assert (
+        "odds ratio 9.7 (2.9 to 31.7) kept constant"
+        in words_of(effect_only("odds_ratio", "9.7 (2.9-31.7)", "12%")).basis
+    )

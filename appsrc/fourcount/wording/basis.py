@@ -5,6 +5,7 @@ from __future__ import annotations
 from fourcount.appraisal.findings import Gap, PatientFindings
 from fourcount.record.outcome import EffectOnly, Outcome, Strata
 from fourcount.wording import limits, names, numbers
+from fourcount.wording.lines.as_printed import carried_texts
 
 POOLED = "pooled "
 ADJUSTED = "adjusted "
@@ -17,13 +18,14 @@ def basis(outcome: Outcome, patient: PatientFindings) -> str:
     carried = patient.carried
     if patient.baseline_from == "reference" or isinstance(carried.estimate, Gap):
         return OWN_RISK.format(risk=names.risk_name(outcome))
+    value, interval = carried_texts(patient.effect, outcome, carried)
     source = " ".join(outcome.patient.starting_risk_source_text.split())
     return GIVEN_RISK.format(
         baseline=numbers.percent_given(patient.baseline),
         source=f" ({source})" if source else "",
         effect=f"{_whose(outcome)}{names.effect_name(outcome, patient.effect)}",
-        value=numbers.ratio(carried.estimate),
-        interval=limits.bracketed(limits.ratio_interval(carried.interval, carried.estimate)),
+        value=value,
+        interval="" if isinstance(carried.interval, Gap) else limits.bracketed(interval),
     )
 
 

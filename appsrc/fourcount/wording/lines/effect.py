@@ -2,11 +2,14 @@
 
 from __future__ import annotations
 
+from dataclasses import replace
+
 from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PrintedFigure
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import names
 from fourcount.wording.form import given, measure_of
+from fourcount.wording.lines.as_printed import effect_texts
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.unpaired import conversion_text, relative_note
 from fourcount.wording.lines.words import KINDS, method_word
@@ -35,4 +38,6 @@ def effect_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) 
     notes = [FROM_P if rebuilt else "", relative_note(measure) if key in ("risk_ratio", "rate_ratio") else ""]
     if key == "odds_ratio":
         notes.append(conversion_text(findings.conversion, names.risk_name(outcome)))
-    return (figure_line(key, name, measure, detail=detail, notes=tuple(notes), per=per),)
+    line = figure_line(key, name, measure, detail=detail, notes=tuple(notes), per=per)
+    estimate, interval = effect_texts(key, outcome, measure, findings)
+    return (replace(line, estimate=estimate, interval=interval),)

@@ -2,15 +2,19 @@
 
 from __future__ import annotations
 
+from dataclasses import replace
+
 from fourcount.appraisal.findings import AnyNumberNeeded, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers
 from fourcount.wording.form import lacking, measure_of
+from fourcount.wording.lines.as_printed import risk_texts
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.unpaired import measure_name, needed_line, relative_note
-from fourcount.wording.lines.words import NO_SPAN, method_word
+from fourcount.wording.lines.words import method_word
 
+GROUPS: dict[str, names.Group] = {"risk_reference": "reference", "risk_index": "index"}
 TIMED_ORDER = ("risk_difference", "number_needed", "risk_reference", "risk_index", "risk_ratio")
 
 
@@ -32,9 +36,13 @@ def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choice
     if key == "risk_difference":
         word = f"per 100, {word}"
     elif key != "risk_ratio":
-        word = f"{names.over_span(outcome) or NO_SPAN}, {word}"
+        word = ", ".join(part for part in (names.over_span(outcome), word) if part)
     notes = (relative_note(measure),) if key == "risk_ratio" else (_past(key, measure.interval),)
-    return figure_line(key, measure_name(key, outcome), measure, detail=word, notes=notes)
+    line = figure_line(key, measure_name(key, outcome), measure, detail=word, notes=notes)
+    if key not in GROUPS:
+        return line
+    estimate, interval = risk_texts(GROUPS[key], outcome, measure)
+    return replace(line, estimate=estimate, interval=interval)
 
 
 def _past(key: str, interval: limits.AnyInterval) -> str:

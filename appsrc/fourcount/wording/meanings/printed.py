@@ -2,13 +2,13 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, OutcomeFindings, PrintedFigure
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PrintedFigure
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import lines, names, numbers
+from fourcount.wording import limits, names
 from fourcount.wording.form import given
-from fourcount.wording.meanings import unpaired
-from fourcount.wording.meanings.parts import given_estimate, no_interval, spanned, times, with_interval
+from fourcount.wording.lines.as_printed import effect_texts, risk_texts
+from fourcount.wording.meanings.parts import given_estimate, no_interval, spanned, times
 from fourcount.wording.printed import PER_UNIT, adjusted_words, paper_measure_name
 
 TURNED = ", here turned round"
@@ -28,7 +28,7 @@ def effect(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFindings
     name = paper_measure_name(key, outcome)
     article = "an" if name.startswith("odds") else "a"
     adjusted = adjusted_words(outcome, printed)
-    claim = _claim(key, outcome, figure, printed, choices)
+    claim = _claim(key, outcome, figure, findings, choices)
     but = _but(key).format(risk=names.risk_name(outcome))
     turned = TURNED if (outcome.index_group == "second") != (outcome.counted == "right") else ""
     return f"The paper prints {article} {name}{adjusted}{turned}: {claim}. {UNCHECKED}, and {but}.{no_interval(figure)}"
@@ -36,9 +36,11 @@ def effect(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFindings
 
 def risk(group: names.Group, outcome: Outcome, figure: Figure, choices: Choices) -> str:
     """A risk at a time, as printed."""
+    estimate, interval = risk_texts(group, outcome, figure)
+    level = "" if isinstance(figure.interval, Gap) else f" ({limits.interval_name(choices.level)} {interval})"
     return (
-        f"{numbers.percent(given_estimate(figure))} of people {names.in_group(outcome, group)} "
-        f"{spanned(names.event_words(outcome), outcome)}{with_interval(f'risk_{group}', figure, choices)}, as printed: "
+        f"{estimate} of people {names.in_group(outcome, group)} "
+        f"{spanned(names.event_words(outcome), outcome)}{level}, as printed: "
         f"an estimate that allows for people followed for different times.{no_interval(figure)}"
     )
 
@@ -53,29 +55,31 @@ def risk_index(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, cho
     return risk("index", outcome, figure, choices)
 
 
-def _claim(key: str, outcome: Outcome, figure: Figure, printed: PrintedFigure, choices: Choices) -> str:
+def _claim(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
     """What the effect says, in lower case and without its full stop; of an odds ratio in odds only."""
-    estimate = given_estimate(figure)
-    interval = with_interval(key, figure, choices, per := PER_UNIT[printed.unit] if key == "rate_difference" else 1)
+    estimate, limits_text = effect_texts(key, outcome, figure, findings)
+    named = f" ({limits.interval_name(choices.level)} {limits_text})"
+    interval = "" if isinstance(figure.interval, Gap) else named
     index, reference = names.in_group(outcome, "index"), names.in_group(outcome, "reference")
     if key == "odds_ratio":
-        claim = unpaired.odds_ratio_claim(outcome, figure, choices)
-        return f"{claim[:1].lower()}{claim[1:]}"
+        event = spanned(names.event_words(outcome), outcome)
+        return f"the odds that a person {index} {event} were {estimate} times those {reference}{interval}"
     if key == "hazard_ratio":
         return (
             f"at any moment, among people still without it, the rate of the event {index} was "
-            f"{numbers.ratio(estimate)} times that {reference}{interval}"
+            f"{estimate} times that {reference}{interval}"
         )
     if key in ("risk_ratio", "rate_ratio"):
         name = names.risk_name(outcome) if key == "risk_ratio" else "rate of events"
-        said = times(name, outcome, numbers.ratio(estimate))
+        said = times(name, outcome, estimate)
         return f"{said[:1].lower()}{said[1:]}{interval}"
+    printed = given(findings)
+    per = PER_UNIT[printed.unit] if isinstance(printed, PrintedFigure) else 1
     people = "100 people" if key == "risk_difference" else f"{per:,} of person-time"
     event = spanned(names.event_words(outcome), outcome) if key == "risk_difference" else "events"
-    change = lines.estimate_text(key, figure, per)
-    if estimate == 0:
+    if given_estimate(figure) == 0:
         return f"per {people} as many {event} {index} as {reference}{interval}"
-    return f"per {people} {change} {event} {index} than {reference}{interval}"
+    return f"per {people} {estimate} {event} {index} than {reference}{interval}"
 
 
 def _but(key: str) -> str:

@@ -6,11 +6,14 @@ from fourcount.appraisal.findings import AnyNumberNeeded, Counts, Figure, Gap, O
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, lines, names, numbers
-from fourcount.wording.form import given
+from fourcount.wording.form import given, measure_of
+from fourcount.wording.lines.as_printed import risk_texts
 from fourcount.wording.lines.pairs import whole_needed_of_pairs
 from fourcount.wording.meanings.parts import estimate_of, given_estimate, no_interval, spanned, times, with_interval
 
 COMPATIBLE_KINDS = "compatible with one fewer and with one more"
+FROM_A_RISK = "from a risk of {risk}"
+WITHIN_STRATA = "pooled over strata whose own risks differ"
 
 
 def difference(outcome: Outcome, figure: Figure, _findings: OutcomeFindings, choices: Choices) -> str:
@@ -45,7 +48,7 @@ def number_needed(outcome: Outcome, needed: AnyNumberNeeded, findings: OutcomeFi
     event, withheld = names.event_words(outcome), limits.withheld_needed(needed)
     return (
         f"{needed.kind} {people} {interval}: for every {people} people {groups} {span}, {change} {event}, "
-        f"on average{names.if_caused(outcome)}, from a risk of {_risk_in('reference', outcome, findings)}.{through} "
+        f"on average{names.if_caused(outcome)}, {_start(outcome, findings)}.{through} "
         f"It does not say who it is, nor that the others gain or lose nothing.{f' {withheld}' if withheld else ''}"
     )
 
@@ -151,13 +154,25 @@ def _two_risks(outcome: Outcome, findings: OutcomeFindings) -> str:
 
 def _risk_in(group: names.Group, outcome: Outcome, findings: OutcomeFindings) -> str:
     """``17.1% with usual care``."""
-    return f"{numbers.percent(estimate_of(_key(f'risk_{group}', findings), findings))} {names.in_group(outcome, group)}"
+    key = _key(f"risk_{group}", findings)
+    figure = measure_of(key, findings)
+    risk = numbers.percent(estimate_of(key, findings))
+    if findings.form == "risk-at-time" and isinstance(figure, Figure):
+        risk = risk_texts(group, outcome, figure)[0]
+    return f"{risk} {names.in_group(outcome, group)}"
+
+
+def _start(outcome: Outcome, findings: OutcomeFindings) -> str:
+    """The risk that a number needed starts from; strata have no common one."""
+    if findings.form == "strata":
+        return WITHIN_STRATA
+    return FROM_A_RISK.format(risk=_risk_in("reference", outcome, findings))
 
 
 def _people_needed(needed: AnyNumberNeeded, findings: OutcomeFindings) -> str:
     """The number needed in whole people, from the whole counts where there are any."""
     found = given(findings)
-    if isinstance(found, Counts):
+    if isinstance(found, Counts) and findings.form != "strata":
         return lines.whole_needed(found)
     return whole_needed_of_pairs(found) if isinstance(found, PairCounts) else numbers.number_needed(needed.estimate)
 
@@ -166,6 +181,8 @@ def _key(measure: str, findings: OutcomeFindings) -> str:
     """A difference's or a risk's key in this form: that of pairs begins with "pair"."""
     if isinstance(given(findings), PairCounts):
         return f"pair_{measure}"
+    if findings.form == "strata" and measure == "difference":
+        return "pooled_risk_difference"
     return "risk_difference" if measure == "difference" else measure
 
 
