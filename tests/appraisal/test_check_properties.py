@@ -2,23 +2,28 @@
 
 from __future__ import annotations
 
+import json
 import math
 
+import msgspec
 import pytest
 from hypothesis import assume, given, settings
 from hypothesis import strategies as st
 
-from fourcount.appraisal.check import check_figures
+from drawn_forms import outcomes
+from fourcount.appraisal.check import check, check_figures
 from fourcount.appraisal.check.basis import of_counts
 from fourcount.appraisal.check.candidate import Way
 from fourcount.appraisal.check.unpaired import unpaired
 from fourcount.appraisal.findings import FigureCheck
+from fourcount.publish.printed import printed as published
 from fourcount.record.entry.readings import PrintedFigure, PrintedNumber
+from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.entries.print_only import PRINT_METHODS
 from fourcount.stats.methods import METHODS
 from fourcount.stats.results import Counts
-from fourcount.wording.check import figure_lines
+from fourcount.wording.check import check_lines, figure_lines
 from tables import CELLS, counts_of
 
 COMPARISONS = [entry for entry in METHODS + PRINT_METHODS if entry.measure != "risk"]
@@ -92,6 +97,25 @@ def test_no_print_stops_the_check(
     for line in figure_lines(found(counts_of(cells), figure)):
         assert line.text.endswith(".")
         assert "nan" not in line.text
+
+
+@settings(max_examples=60)
+@given(
+    outcome=outcomes(),
+    text=st.sampled_from(
+        ["OR 2.5 (0.9 to ∞)", "RR 0.5 (0.3 to 0.8), P = 0", "HR 0.5 (0.3 to ∞)", "-8% (3 to 13)", "p = 0.4"]
+    ),
+    family=st.sampled_from(["score", "textbook", "exact"]),
+)
+def test_no_form_stops_the_check(outcome: Outcome, text: str, family: str) -> None:
+    """Any table of any form beside odd prints: whole sentences, and nothing that JSON cannot hold."""
+    checked = check(msgspec.structs.replace(outcome, paper_text=text), Choices(family=family))  # type: ignore[arg-type]
+    for line in check_lines(checked):
+        assert line.text.endswith(".")
+        assert "nan" not in line.text
+        assert "…" not in line.text
+        assert line.text.count("(") == line.text.count(")")
+    json.dumps(published(checked), allow_nan=False)
 
 
 @given(cells=POSITIVE)

@@ -103,7 +103,8 @@ def _figure(measure: Any, values: tuple[float, ...], decimals: int, unit: Any) -
     estimate, low, high = (
         PrintedNumber(text=f"{value:.{decimals}f}", value=round(value, decimals), decimals=decimals) for value in values
     )
-    return PrintedFigure(measure=measure, text="", estimate=estimate, low=low, high=high, unit=unit)
+    name = measure.replace("_", " ")
+    return PrintedFigure(measure=measure, text=name, estimate=estimate, low=low, high=high, unit=unit)
 
 
 def simulate(tables: int, seed: int) -> Iterator[tuple[str, str, int, Tally]]:

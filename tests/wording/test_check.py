@@ -319,3 +319,12 @@ def test_limits_of_another_method_are_told_behind_the_ones_on_screen() -> None:
         "check the limits: the method shown, Newcombe hybrid score for pairs, gives −5.52 to 19.05 at 95%, and the "
         "nearest, Tango score, −6.14 to 20.93." in line
     )
+
+
+def test_numbers_that_nobody_would_count_the_noughts_of() -> None:
+    """Very large and very small figures of ours have a power of ten, a small p a bound, and one point is no points."""
+    (large,) = lines_beside(of_four(999999, 1, 1, 9999999), "OR 3.0")
+    assert "the counts give 1.00×10¹³ for the odds ratio" in large
+    (p,) = lines_beside(of_four(380, 30, 30, 390), "P < 0.001")
+    assert p == "p < 0.001 follows from the counts by every test here (<0.0001)."
+    assert lines_beside(of_four(38, 374, 70, 339), "risk difference 1%")[0].startswith("Check 1 point: ")

@@ -74,6 +74,8 @@ HALF_ADDED = "{title} (1/2 added, since a count is 0)"
 METHODS_KIND, TESTS_KIND = ("method", "methods"), ("test", "tests")
 OTHERS = "{number} other {kind}"
 MOST_NAMED = 2
+HUGE = 1e9
+ONE_POINT = ("1 points", f"{numbers.MINUS}1 points")
 LOWER, UPPER = "lower limit {limit}", "upper limit {limit}"
 
 AND, OR, COMMA = " and ", " or ", ", "
@@ -157,6 +159,8 @@ def printed_text(figure: PrintedFigure) -> str:
     if figure.estimate is None:
         return limits
     estimate = f"{as_printed(figure.estimate)}{unit(figure)}"
+    if estimate in ONE_POINT:
+        estimate = estimate.removesuffix("s")
     return f"{estimate} ({limits})" if limits else estimate
 
 
@@ -211,4 +215,13 @@ def ours(value: Fact | None, printed: PrintedNumber | None) -> str:
     if not isinstance(value, int | float):
         return "…"
     decimals = 2 if printed is None else printed.decimals
-    return numbers.plain(value, decimals + 1)
+    size = abs(value)
+    if size >= HUGE and math.isfinite(size):
+        return _as_power(value)
+    return _as_power(value) if 0 < size < numbers.SMALLEST_RATIO else numbers.plain(value, decimals + 1)
+
+
+def _as_power(value: float) -> str:
+    """Three significant digits and their power of ten, where nobody would count the noughts."""
+    digits, power = f"{abs(value):.2e}".split("e")
+    return f"{numbers.MINUS if value < 0 else ''}{digits}×10{str(int(power)).translate(numbers.SUPERSCRIPT)}"

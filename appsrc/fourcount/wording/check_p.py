@@ -74,8 +74,9 @@ def _p_beside(value: object, figure: PrintedFigure) -> str:
     """A p of ours with one decimal more than the printed one."""
     if not isinstance(value, int | float):
         return "…"
-    decimals = 2 if figure.p is None else figure.p.decimals
-    return numbers.plain(value, decimals + 1) if value > 0 else "0"
+    decimals = 1 + (2 if figure.p is None else figure.p.decimals)
+    least = 10.0**-decimals
+    return numbers.plain(value, decimals) if value >= least / 2 else f"<{numbers.plain(least, decimals)}"
 
 
 def _span(least: str, most: str) -> str:
