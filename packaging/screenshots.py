@@ -75,7 +75,7 @@ def take(shot: Shot, folder: Path, application: QApplication) -> None:
         window.resize(shot.width, shot.height)
         window.show()
         wait_for(window.numbers_ready.connect)
-        if shot.example and not window.checking.found:
+        if shot.example and window.checking and not window.checking.found:
             wait_for(window.checking.changed.connect)
         for _ in range(3):
             application.processEvents()

@@ -105,7 +105,7 @@ def test_a_letter_says_what_it_rests_on(outcome, rests) -> None:
             strata(),
             (
                 "- Risk ratio, pooled: 0.55 (95% interval 0.38 to 0.79), Mantel–Haenszel, relative reduction 45%",
-                "- NNTB, crude 13 (95% interval 8 to 31) over 12 months",
+                "- NNTB, pooled 13 (95% interval 9 to 32) over 12 months",
                 "score intervals at 95%. Pooled by Mantel and Haenszel.",
             ),
         ),

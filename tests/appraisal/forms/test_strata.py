@@ -221,3 +221,23 @@ def test_a_cohorts_e_value_is_of_the_pooled_ratio():
     findings = found(ALIKE, design="cohort")
     ratio = 1 / findings.strata.pooled["pooled_risk_ratio"].estimate
     assert findings.extras.e_value.estimate == pytest.approx(ratio + (ratio * (ratio - 1)) ** 0.5)
+
+
+OPPOSED = ((10, 190, 30, 270), (15, 85, 12, 38), (60, 40, 5, 5))
+"""Crude 8 more in 100, within the strata 5 fewer."""
+
+
+def test_the_number_needed_is_that_of_the_pooled_difference():
+    """Where crude and pooled point opposite ways, it goes with the pooled one, interval included."""
+    findings = found(OPPOSED)
+    pooled, needed = findings.strata.pooled["pooled_risk_difference"], findings.measures["number_needed"]
+    assert findings.measures["risk_difference"].estimate > 0 > pooled.estimate
+    assert needed.estimate == pytest.approx(-1 / pooled.estimate)
+    assert needed.kind == "NNTB"
+    assert needed.through_infinity == (pooled.interval.low < 0 < pooled.interval.high)
+
+
+def test_a_number_that_the_design_withholds_is_not_pooled_either():
+    """A survey has none, and neither have people followed for different times."""
+    assert found(OPPOSED, design="survey").measures["number_needed"] == Gap("design-survey-nnt")
+    assert isinstance(found(OPPOSED, follow_up_varied=True).measures["number_needed"], Gap)

@@ -20,13 +20,19 @@ from fourcount.wording.form import crude, lacking, measure_of
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines.line import MeasureLine, blank_line, figure_line, withheld_line
 from fourcount.wording.lines.text import estimate_text, interval_text
-from fourcount.wording.lines.unpaired import conversion_text, measure_name, relative_note, unpaired_line
+from fourcount.wording.lines.unpaired import (
+    conversion_text,
+    measure_name,
+    needed_line,
+    relative_note,
+    unpaired_line,
+)
 from fourcount.wording.lines.words import IN_THE_STUDY, method_word
 
 ORDER = (
     "pooled_risk_difference",
-    "risk_difference",
     "number_needed",
+    "risk_difference",
     "risk_reference",
     "risk_index",
     "pooled_risk_ratio",
@@ -54,9 +60,11 @@ def strata_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) 
 
 def strata_name(key: str, outcome: Outcome, needed: AnyNumberNeeded | None = None) -> str:
     """What a line of strata calls its measure: pooled or crude."""
+    if key == "number_needed":
+        return POOLED.format(name=measure_name(key, outcome, needed).removesuffix(IN_THE_STUDY))
     if key.startswith("pooled_"):
         return POOLED.format(name=measure_name(key.removeprefix("pooled_"), outcome))
-    return CRUDE.format(name=measure_name(key, outcome, needed).removesuffix(IN_THE_STUDY))
+    return CRUDE.format(name=measure_name(key, outcome))
 
 
 def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> MeasureLine:
@@ -66,7 +74,9 @@ def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choice
         return blank_line(key, name)
     if isinstance(measure, Gap):
         return withheld_line(key, name, measure)
-    if not key.startswith("pooled_") or not isinstance(measure, Figure):
+    if isinstance(measure, AnyNumberNeeded):
+        return needed_line(name, measure, outcome, numbers.number_needed(measure.estimate))
+    if not key.startswith("pooled_"):
         return replace(unpaired_line(key, outcome, crude(findings), choices), name=name)
     unit = "per 100, " if key == "pooled_risk_difference" else ""
     relative = relative_note(measure) if key == "pooled_risk_ratio" else ""

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import (
+    AnyNumberNeeded,
     Counts,
     Figure,
     Gap,
@@ -26,11 +27,12 @@ from fourcount.wording.working.parts import (
     about,
     interval_rows,
     other_methods,
+    reciprocal,
     rows_of_tests,
     table_measure,
     value,
 )
-from fourcount.wording.working.unpaired import unpaired_rows
+from fourcount.wording.working.unpaired import needed_rows, unpaired_rows
 
 RATIO_OF_RATIOS = "Ratio of the two strata’s ratios"
 DIFFERENCE_OF_DIFFERENCES = "Between the two strata’s differences, per 100"
@@ -39,6 +41,8 @@ DIFFERENCE_OF_DIFFERENCES = "Between the two strata’s differences, per 100"
 def strata_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
     """A pooled measure's rows; a crude one's are those of the four counts thrown together."""
     strata, found = findings.strata, measure_of(measure, findings)
+    if isinstance(found, AnyNumberNeeded):
+        return _needed(found, findings, choices)
     if not measure.startswith("pooled_"):
         return unpaired_rows(measure, outcome, crude(findings), choices)
     if not isinstance(strata, StrataFindings) or not isinstance(found, Figure):
@@ -50,6 +54,16 @@ def strata_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choic
     rows += interval_rows(measure, found, choices.level, "strata", unit=unit)
     rows += _interaction(measure, strata)
     return (*rows, *other_methods(measure, found, table_measure(measure), (counts,), choices.level))
+
+
+def _needed(needed: AnyNumberNeeded, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
+    """The reciprocal of the pooled difference and of its limits."""
+    pooled = measure_of("pooled_risk_difference", findings)
+    if not isinstance(pooled, Figure) or isinstance(pooled.estimate, Gap):
+        return ()
+    estimate = reciprocal(abs(pooled.estimate), numbers.number_needed(needed.estimate))
+    rows = needed_rows(needed, pooled, findings, choices, measure="pooled_risk_difference")
+    return ((ESTIMATE, estimate), *rows)
 
 
 def strata_test_rows(findings: OutcomeFindings) -> tuple[Row, ...]:

@@ -67,12 +67,19 @@ def unpaired_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, cho
 
 
 def needed_rows(
-    needed: AnyNumberNeeded, difference: Figure | AnyNumberNeeded | Gap, findings: OutcomeFindings, choices: Choices
+    needed: AnyNumberNeeded,
+    difference: Figure | AnyNumberNeeded | Gap,
+    findings: OutcomeFindings,
+    choices: Choices,
+    measure: str = "number_needed",
 ) -> list[Row]:
-    """The interval of a number needed: the reciprocals of the difference's limits, by the difference's method."""
+    """The interval of a number needed: the reciprocals of the difference's limits, by the difference's method.
+
+    ``measure`` is the key of the difference where it is not the form's own.
+    """
     rows = [SPACE, (interval_label(choices.level), limits.number_needed_interval(needed))]
     rows.append(("How", BY_LIMITS["number_needed"]))
-    entry = entry_of("number_needed", difference, findings.form) if isinstance(difference, Figure) else None
+    entry = entry_of(measure, difference, findings.form) if isinstance(difference, Figure) else None
     return rows if entry is None else [*rows, *about(entry)]
 
 
