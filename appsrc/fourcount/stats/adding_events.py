@@ -29,6 +29,7 @@ class AddingEvents:
     threshold: float
 
     def table(self, added: int) -> Counts:
+        """The counts with so many people of the index group turned from non-events to events."""
         return Counts(
             index_events=self.start.index_events + added,
             index_non_events=self.start.index_non_events - added,
@@ -47,6 +48,7 @@ class AddingEvents:
         return 1.0 if isinstance(p, Gap) else p
 
     def reaches(self, p: float) -> bool:
+        """Whether a p is the threshold or above it, last bits apart."""
         return p >= self.threshold * (1.0 - _SAME)
 
     def bound(self, first: int, last: int) -> float:

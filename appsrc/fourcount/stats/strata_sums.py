@@ -9,6 +9,7 @@ from fourcount.stats.results import Counts, Gap
 
 
 def with_both_groups(strata: Sequence[Counts]) -> tuple[Counts, ...]:
+    """The strata in which both groups have somebody: no other one compares anything."""
     return tuple(t for t in strata if t.index_total and t.reference_total)
 
 
@@ -23,6 +24,7 @@ def smallest_expected(t: Counts) -> float:
 
 
 def nothing_to_compare(compared: Sequence[Counts]) -> Gap:
+    """Why strata with both groups give no odds ratio: nobody had the event, or everybody, or there are no strata."""
     if compared and not any(t.events for t in compared):
         return Gap("no-events")
     if compared and not any(t.non_events for t in compared):
@@ -31,6 +33,7 @@ def nothing_to_compare(compared: Sequence[Counts]) -> Gap:
 
 
 def cross_products(compared: Sequence[Counts]) -> tuple[float, float]:
+    """Mantel and Haenszel's sum(ad/N) and sum(bc/N), whose quotient is the pooled odds ratio; either can be 0."""
     towards = math.fsum(t.index_events * t.reference_non_events / t.total for t in compared)
     against = math.fsum(t.index_non_events * t.reference_events / t.total for t in compared)
     return towards, against
