@@ -80,3 +80,15 @@ def test_what_cannot_be_of_the_chosen_form_is_not():
     """500 of 412 are no events of a total."""
     doubtful = pasted("500", "412", "70", "409")
     assert in_chosen_form(doubtful, "events-of-total") is doubtful
+
+
+def test_a_total_that_stands_first_is_a_way():
+    """412 and 38 may be 38 of 412: the counts change places, and so do their headings."""
+    doubtful = pasted("412", "38", "409", "70", ambiguous=("others-or-totals",), left_heading="a", right_heading="b")
+    found = ways(doubtful)
+    assert [(way.form, cells_of(way), way.left_heading) for way in found] == [
+        ("events-and-others", ["412", "38", "409", "70"], "a"),
+        ("events-of-total", ["38", "412", "70", "409"], "b"),
+    ]
+    chosen = in_chosen_form(doubtful, "events-of-total")
+    assert (chosen.form, cells_of(chosen)) == ("events-of-total", ["38", "412", "70", "409"])

@@ -25,10 +25,9 @@ def in_chosen_form(pasted: Pasted, form: Form) -> Pasted:
     """Four bare counts as the form that the reader has chosen before, without the doubts that this settles."""
     if form not in CHOSEN or not set(FORM_DOUBTS) & set(pasted.ambiguous) or len(pasted.groups) != 2:
         return pasted
-    chosen = replace(
-        pasted, form=form, ambiguous=tuple(doubt for doubt in pasted.ambiguous if doubt not in FORM_DOUBTS)
-    )
-    if not _possible(chosen):
+    doubts = tuple(doubt for doubt in pasted.ambiguous if doubt not in FORM_DOUBTS)
+    chosen = _in_form(replace(pasted, ambiguous=doubts), form)
+    if chosen is None:
         return pasted
     settled = form == "events-of-total" and len(ways(chosen)) == 1
     doubts = tuple(doubt for doubt in chosen.ambiguous if not (settled and doubt == "orientation"))
@@ -46,11 +45,22 @@ def ways(pasted: Pasted) -> tuple[Pasted, ...]:
 
 def _other_forms(pasted: Pasted) -> tuple[Pasted, ...]:
     others = [
-        replace(pasted, form=forms[pasted.form])
+        _in_form(pasted, forms[pasted.form])
         for doubt, forms in OTHER_FORMS.items()
         if doubt in pasted.ambiguous and pasted.form in forms
     ]
-    return tuple(way for way in others if _possible(way))
+    return tuple(way for way in others if way)
+
+
+def _in_form(pasted: Pasted, form: Form) -> Pasted | None:
+    """The same counts in another form; where their totals stand first, they change places. None where neither can be."""
+    straight = replace(pasted, form=form)
+    if _possible(straight):
+        return straight
+    groups = tuple(replace(each, left_text=each.right_text, right_text=each.left_text) for each in pasted.groups)
+    headings = pasted.right_heading, pasted.left_heading
+    swapped = replace(straight, groups=groups, left_heading=headings[0], right_heading=headings[1])
+    return swapped if _possible(swapped) else None
 
 
 def _possible(pasted: Pasted) -> bool:

@@ -73,12 +73,7 @@ def delimited_cell(text: str) -> list[Cell]:
     if not tokens or text.casefold().strip() in _BLANKS or not any(_tells(token) for token in tokens):
         return [Cell(text=text)]
     numbers = sum(token.kind == "number" for token in tokens)
-    if (
-        len(tokens) == numbers == 1
-        and tokens[0].whole is not None
-        and not tokens[0].percent
-        and tokens[0].text[0].isdigit()
-    ):
+    if len(tokens) == numbers == 1 and tokens[0].whole is not None and not tokens[0].percent:
         return [Cell(text=tokens[0].text, quantity=Phrases(tokens, bare=True).quantity_at(0))]
     compound = len(tokens) > 2 and tokens[1].text == "-" and tokens[2].kind == "word"
     named = compound or (tokens[0].kind == "word" and (tokens[0].lower not in ("n", "p") or not numbers))
@@ -239,6 +234,9 @@ def _cell_at(printed: Print, phrases: Phrases, place: int) -> tuple[Cell | None,
         return _p(printed, place)
     if token.kind != "number":
         return None, place + 1
+    if phrases.at(place + 1).text == "\u00b1" and phrases.at(place + 2).kind == "number":
+        text = printed.piece(place, place + 3)
+        return Cell(text=text, result=text), place + 3
     result = _result(printed, phrases, place)
     if result:
         return result

@@ -24,6 +24,8 @@ def effects_alone(matrix: Matrix, lines: Sequence[str]) -> Pasted | None:
         heads, cells = matrix.heads, matrix.rows[0]
     elif len(matrix.heads) == 1:
         heads, cells = matrix.labels, tuple(row[0] for row in matrix.rows)
+    elif len(matrix.rows) == 1 and matrix.labels[0].label:
+        heads, cells = (matrix.labels[0], *matrix.heads[1:]), matrix.rows[0]
     else:
         return None
     if any(cell.quantity and cell.quantity.events for cell in cells):

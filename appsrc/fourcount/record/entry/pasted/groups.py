@@ -281,6 +281,7 @@ def _by_order(matrix: Matrix, columns: Sequence[int]) -> Understood | None:
         return None
     events, second = columns
     together = _percent_fits(matrix, events, second, gives, together=True)
+    alone = _percent_fits(matrix, events, second, gives, together=False)
     for first, other in ((events, second), (second, events)):
         fits = any(_percent_fits(matrix, first, other, judge, together=False) for judge in (gives, nearly_gives))
         if fits and not together and (pair := _with_totals(matrix, first, _tokens(matrix, other))):
@@ -289,7 +290,7 @@ def _by_order(matrix: Matrix, columns: Sequence[int]) -> Understood | None:
     told = all(matrix.heads[place].label for place in columns)
     above = [_count(matrix, row, events) - _count(matrix, row, second) for row in (0, 1)]
     surely = told or min(above) < 0 < max(above)
-    surely = surely or together or _percent_fits(matrix, events, second, nearly_gives, together=True)
+    surely = surely or (not alone and _percent_fits(matrix, events, second, nearly_gives, together=True))
     return _two_outcomes(matrix, events, second, score=1, doubts=() if surely else ("others-or-totals",))
 
 

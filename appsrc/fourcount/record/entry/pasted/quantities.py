@@ -115,6 +115,8 @@ class Phrases:
         events = self.at(place)
         link = place + 1
         percent, link = self._percent(self._nouns(link, 3), events, None, back=link)
+        if self.at(noun := self._nouns(link, 2)).text == "/":
+            link = noun
         if self.at(link).text == "/" and percent is None:
             total_place = link + 1
             if self.at(total_place + 1).text == "/" or self.at(place - 1).text == "/":
