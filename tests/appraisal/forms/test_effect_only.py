@@ -190,3 +190,18 @@ def test_e_values_of_printed_ratios():
     assert common.converted == "odds_ratio"
     assert common.estimate < values.estimate
     assert found("OR 3.9 (1.8 to 8.7)").extras.e_value is None
+
+
+def test_limits_that_do_not_hold_their_estimate_carry_nothing():
+    """The estimate stands and is marked; neither the patient nor p rests on limits that belong to something else."""
+    findings = found("OR 5 (1 to 2)", baseline="12%")
+    assert only(findings) == Figure(estimate=5.0, interval=Gap("limits-disordered"), method="printed")
+    assert isinstance(findings.patient.difference.interval, Gap)
+    assert isinstance(findings.conversion.risk_ratio.interval, Gap)
+    assert isinstance(findings.extras.recovered, Gap)
+
+
+def test_limits_printed_the_other_way_round_are_put_in_order():
+    """A difference is often printed from the larger size to the smaller."""
+    figure = only(found("RD -7.9% (-3.3 to -12.6)", paper_measure="risk_difference"))
+    assert limits(figure) == pytest.approx((-0.079, -0.126, -0.033))

@@ -59,7 +59,8 @@ def is_adjusted(printed: PrintedFigure, outcome: Outcome) -> bool:
 def as_figure(printed: PrintedFigure) -> Figure | Gap:
     """Estimate and limits as fractions and ratios, the interval a Gap where two limits are not printed.
 
-    Printed limits in the wrong order are put in order; the field's mark says so.
+    Printed limits in the wrong order are put in order; the field's mark says so. Limits that do not hold their own
+    estimate give no interval, so that nothing rests on them.
     """
     if printed.estimate is None:
         return Gap("effect-unreadable")
@@ -71,5 +72,6 @@ def as_figure(printed: PrintedFigure) -> Figure | Gap:
         return Gap("effect-out-of-range")
     interval: Interval | Gap = Gap("no-interval-printed")
     if printed.low is not None and printed.high is not None:
-        interval = Interval(low=min(numbers[1:]), high=max(numbers[1:]))
+        low, high = min(numbers[1:]), max(numbers[1:])
+        interval = Interval(low=low, high=high) if low <= numbers[0] <= high else Gap("limits-disordered")
     return Figure(estimate=numbers[0], interval=interval, method=PRINTED)
