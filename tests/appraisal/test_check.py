@@ -283,6 +283,9 @@ def test_a_difference_may_have_either_sign(checked: Checked) -> None:
     assert first(found).agrees
     assert found.adopt == ("textbook", 0.95)
     assert keys(checked((70, 339, 38, 374), "RD -7.9% (-12.5 to -3.3)")) == ["other-sign"]
+    last = checked(FALLS, "ARR 9.9% (4.3 to 15.5)").figures[0].findings[-1]
+    assert (last.key, round(float(last.facts["estimate"]), 2)) == ("nearest", 7.89)
+    assert first(checked(FALLS, "ARR 7.9% (3.3 to 15.2)")).key == "one-limit"
 
 
 def test_a_percentage_that_no_word_calls_a_difference(checked: Checked) -> None:

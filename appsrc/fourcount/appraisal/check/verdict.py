@@ -184,8 +184,9 @@ def _nearest(figure: PrintedFigure, candidates: tuple[Candidate, ...], shown: Sh
 
     A difference is seen with the sign that is printed.
     """
-    named = [one for one in candidates if one.named and one.as_printed]
-    own = min(named, key=lambda one: _other_sign(figure, one), default=candidates[0])
+    own = next((one for one in candidates if one.named and one.orientation == "as-read"), candidates[0])
+    if _other_sign(figure, own):
+        own = next((one for one in candidates if one.named and one.sign_alone), own)
     way: Way | None = None
     if has_limits(figure):
         way = shown.way(own, wanted_level(figure))
@@ -204,9 +205,9 @@ def _groups(hits: Iterable[Hit]) -> Iterator[tuple[Hit, ...]]:
 
 
 def _other_sign(figure: PrintedFigure, candidate: Candidate) -> bool:
-    """Whether a difference has not the sign that is printed."""
+    """Whether a figure has the sign that is not printed."""
     printed, value = figure.estimate or figure.low, candidate.value()
-    return candidate.sign_alone is not (printed is not None and value is not None and printed.value * value > 0)
+    return printed is not None and value is not None and printed.value * value < 0
 
 
 def _facts_of(group: Sequence[Hit], shown: Shown | None = None) -> Facts:
