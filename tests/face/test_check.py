@@ -98,6 +98,28 @@ def test_an_adjusted_effect_that_cannot_be_read_marks_its_own_field(example: Han
     assert field.marked
 
 
+@pytest.mark.parametrize("text", ["0.54 (0.39 to 0.73)", "0.49 (0.35 to 0.70)", "0.54 (0.37 to 0.87); P = 0.3"])
+def test_a_new_answer_comes_into_view_with_its_field(example: Hands, text: str) -> None:
+    """In a low window, the field, every sentence and the link stand on screen when the answer is there."""
+    window = example.window
+    window.resize(1280, 620)
+    example.do("paper")
+    says(example, text)
+    view = check_of(example)
+
+    def seen() -> bool:
+        port = window.page_scroll.viewport()
+        shown = [view.paper.text, view.adopt, *(row.words for row in view.rows)]
+        places = [
+            (part.mapTo(port, part.rect().topLeft()).y(), part.mapTo(port, part.rect().bottomLeft()).y())
+            for part in shown
+            if part.isVisible()
+        ]
+        return all(top >= 0 and bottom < port.height() for top, bottom in places)
+
+    example.qtbot.waitUntil(seen)
+
+
 def test_adopting_takes_family_and_level_in_one_step(example: Hands) -> None:
     """A 90% textbook interval is found; the link takes both, and one undo gives both back."""
     view = check_of(example)

@@ -94,6 +94,15 @@ def test_the_banner_can_be_dismissed_by_keyboard(failing: Hands) -> None:
     assert failing.window.banner.isVisible()
 
 
+def test_the_banner_goes_with_what_works_next(failing: Hands) -> None:
+    """A new table, a keystroke or a copy: what went wrong is over."""
+    for command in ("new", "undo", "copy-text"):
+        failing.do("swap")
+        assert failing.window.banner.isVisible()
+        failing.do(command)
+        assert not failing.window.banner.isVisible()
+
+
 def test_without_a_log_the_sentence_names_none(failing: Hands, folder: Path) -> None:
     """Where no log can be written, the banner does not send anybody there."""
     folder.write_text("not a folder", encoding="ascii")

@@ -8,6 +8,7 @@ import pytest
 from PySide6.QtCore import Qt
 from PySide6.QtWidgets import QWidget
 
+from fourcount.face.links import Link
 from fourcount.record.outcome import CELLS, FORMS, Form, form_of
 from fourcount.record.paper import Record
 from fourcount.wording import labels
@@ -199,8 +200,81 @@ def test_tab_comes_round_in_every_form(hands: Hands, form: Form) -> None:
         if widget.isVisible() and widget.isEnabled() and widget.focusPolicy() & Qt.FocusPolicy.TabFocus
     ]
     assert {id(widget) for widget in stops} - {id(widget) for widget in seen} == set()
-    tops = [hands.top(widget) for widget in seen if hands.stands_alone(widget)]
+    check = hands.window.printed.rare.check
+    assert check is not None
+    paper = (check.paper.measure, *check.paper.fields)
+    tops = [hands.top(widget) for widget in seen if hands.stands_alone(widget) and widget not in paper]
     assert tops == sorted(tops)
+
+
+@pytest.mark.parametrize("form", [form for form in FORMS if form != "effect-only"])
+def test_tab_goes_from_the_table_to_what_the_paper_says(hands: Hands, form: Form) -> None:
+    """After the last count the paper's own result comes next; the links, which few need, come after it."""
+    hands.fill(form)
+    if form == "strata":
+        hands.press("Tab", 4)  # through the empty row
+    for _ in range(2):
+        hands.press("Tab")
+    assert hands.field == "paper_text"
+    hands.press("Tab")
+    hands.qtbot.waitUntil(lambda: isinstance(hands.focus, Link))
+
+
+def test_a_form_that_makes_the_study_another_one_says_so(hands: Hands) -> None:
+    """Pairs make a trial a paired study, and a matched study makes the form pairs: both are told under the table."""
+    printed = hands.window.printed
+    hands.do("form-pairs")
+    assert printed.notice.isVisible()
+    assert labels.DESIGNS["paired"] in printed.notice.text()
+    hands.do("first-cell")
+    hands.type("1")
+    assert not printed.notice.isVisible()
+    hands.do("form-events-of-total")
+    assert labels.DESIGNS["trial"] in printed.notice.text()
+    hands.do("form-percent-of-total")
+    assert not printed.notice.isVisible()
+    hands.choose(printed.design, labels.DESIGNS["matched"])
+    assert labels.FORM_NOTES["pairs"] in printed.notice.text()
+
+
+@pytest.mark.qt_log_ignore("does not support grabbing the keyboard", extend=True)  # a list, on a screen that is none
+def test_a_key_goes_to_the_kind_of_study(hands: Hands) -> None:
+    """It opens the choice."""
+    hands.window.actions_by_key["study"].trigger()
+    hands.qtbot.waitUntil(hands.window.printed.design.view().isVisible)
+    hands.window.printed.design.hidePopup()
+
+
+@pytest.mark.parametrize("form", ["pairs", "person-time", "effect-only"])
+def test_a_form_that_carries_nothing_asks_for_no_starting_risk(hands: Hands, form: Form) -> None:
+    """The fields of the third column are there only where a starting risk would come to something."""
+    patient = hands.window.patient
+    assert patient.baseline.isVisible()
+    hands.fill(form)
+    if form == "effect-only":
+        assert patient.baseline.isVisible()
+        hands.write(hands.focus, "HR 0.72 (0.55 to 0.92)")
+    for field in (patient.baseline, patient.source, patient.effect):
+        assert not field.isVisible()
+    assert patient.waits.text()
+    assert not hands.window.actions_by_key["baseline"].isEnabled()
+    hands.do("form-events-of-total")
+    assert patient.baseline.isVisible()
+    assert hands.window.actions_by_key["baseline"].isEnabled()
+
+
+def test_a_lone_effect_is_an_odds_ratio_until_its_text_names_another(hands: Hands) -> None:
+    """The choice beside the text follows what is typed, in the same step, and stays when the name is edited away."""
+    hands.do("form-effect-only")
+    check = hands.window.printed.rare.check
+    assert check is not None
+    assert check.paper.measure.currentText() == "odds ratio"
+    hands.type("HR 0.72")
+    assert check.paper.measure.currentText() == "hazard ratio"
+    hands.write(check.paper.text, "0.72 (0.55 to 0.92)")
+    assert check.paper.measure.currentText() == "hazard ratio"
+    hands.do("undo")
+    assert check.paper.measure.currentText() == "odds ratio"
 
 
 def test_every_form_can_be_walked_through_and_undone(example: Hands) -> None:

@@ -78,7 +78,7 @@ def test_the_figures_follow(waiting: Hands, gate: Gate) -> None:
     gate.open.set()
     waiting.qtbot.waitUntil(lambda: FOLLOWS not in str(waiting.rows))
     assert waiting.rows["risk_reference"] == "Risk, reference group: 17.1%, 13.6 to 21.1%"
-    assert "p < 0.001 by the Fisher" in waiting.p
+    assert waiting.p.startswith("p < 0.001, two-sided (Fisher")
 
 
 def test_typing_goes_on_meanwhile(waiting: Hands, gate: Gate) -> None:

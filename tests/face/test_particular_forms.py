@@ -77,7 +77,7 @@ def test_swapping_sides_of_pairs_turns_their_odds_ratio(hands: Hands) -> None:
 
 
 def test_the_unit_of_person_time_is_typed_over_its_column(hands: Hands) -> None:
-    """The unit is said in the rates' lines, and comes back with an undo."""
+    """It begins as person-years, is said in the rates' lines, and comes back with an undo."""
     hands.do("form-person-time")
     hands.count(*TYPED["person-time"])
     unit = hands.window.printed.field_named("unit_text")
@@ -85,7 +85,7 @@ def test_the_unit_of_person_time_is_typed_over_its_column(hands: Hands) -> None:
     hands.write(unit, "patient-days")
     assert "patient-days" in hands.window.says._rows["rate_index"].accessibleDescription()
     hands.do("undo")
-    assert unit.text() == ""
+    assert unit.text() == "person-years"
     assert hands.focus is unit
 
 

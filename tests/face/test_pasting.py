@@ -10,11 +10,13 @@ from PySide6.QtGui import QAction, QDropEvent, QGuiApplication
 from PySide6.QtWidgets import QMenu
 
 from fourcount.face.printed.paste_panel import PastePanel
-from fourcount.record.outcome import CELLS, EventsAndOthers, EventsOfTotal, form_of
-from fourcount.wording.printed_labels import NO_TABLE_PASTED
+from fourcount.record.outcome import CELLS, EventsAndOthers, EventsOfTotal, Strata, Stratum, form_of
+from fourcount.wording.printed_labels import COUNTS_NOT_UNDERSTOOD, NO_TABLE_PASTED
 
 if TYPE_CHECKING:
     from conftest import Hands
+
+EXAMPLE_COUNTS = ("38", "374", "70", "339")
 
 SENTENCE = (
     "Falls occurred in 38 of 412 patients (9.2%) with night lights and 70 of 409 (17.1%) with usual care "
@@ -46,7 +48,7 @@ def test_a_sentence_fills_everything_in_one_step(hands: Hands) -> None:
     assert (outcome.first_label_text, outcome.second_label_text) == ("night lights", "usual care")
     assert "0.54" in outcome.paper_text
     assert hands.rows["risk_ratio"].startswith("Risk ratio: 0.54")
-    assert hands.window.header.notice.text().startswith("Pasted: table, groups")
+    assert hands.window.printed.notice.text().startswith("Pasted: table, groups")
     check = hands.window.printed.rare.check
     assert check is not None
     hands.qtbot.waitUntil(lambda: bool(check.sentences))
@@ -206,8 +208,49 @@ def test_the_command_pastes_from_anywhere(hands: Hands) -> None:
     paste(hands, BLOCK, "Ctrl+Shift+V")
     assert hands.texts == ("38", "374", "70", "339")
     paste(hands, "nothing of the kind", "Ctrl+Shift+V")
-    assert hands.window.header.notice.text() == NO_TABLE_PASTED
-    assert hands.texts == ("38", "374", "70", "339")
+    notice = hands.window.printed.notice
+    assert notice.isVisible()
+    assert notice.text() == NO_TABLE_PASTED
+    paste(hands, "It was 12 in May and 14 in June", "Ctrl+Shift+V")
+    assert notice.text() == COUNTS_NOT_UNDERSTOOD
+    paste(hands, DOUBTFUL, "Ctrl+Shift+V")
+    assert not notice.isVisible()
+    hands.press("Escape")
+    hands.do("undo")
+    assert hands.texts == ("", "", "", "")
+
+
+@pytest.mark.parametrize("field", ["name_text", "first_label_text", "span_text", "paper_text"])
+def test_an_effect_alone_is_text_among_words(example: Hands, field: str) -> None:
+    """Only in a cell does it make another table."""
+    place = example.window.printed.field_named(field)
+    assert place is not None
+    example.write(place, "")
+    paste(example, "Risk ratio 0.54 (0.37 to 0.78)")
+    assert place.text() == "Risk ratio 0.54 (0.37 to 0.78)"
+    assert example.texts == EXAMPLE_COUNTS
+
+
+@pytest.mark.parametrize(
+    ("text", "label", "cells"),
+    [
+        ("9/122\t15/125", "", ("9", "122", "15", "125")),
+        ("women\t9\t122\t15\t125", "women", ("9", "122", "15", "125")),
+    ],
+)
+def test_a_row_pasted_into_strata_fills_its_row(hands: Hands, text: str, label: str, cells: tuple[str, ...]) -> None:
+    """One row of a table belongs where the cursor is; the others stay; one undo takes it back."""
+    hands.fill("strata")
+    hands.press("Tab")
+    before = hands.window.session.outcome
+    paste(hands, text)
+    table = hands.window.session.outcome.table
+    assert isinstance(table, Strata)
+    assert table.strata[2] == Stratum(label_text=label, **dict(zip(CELLS, cells, strict=True)))
+    assert table.strata[:2] == before.table.strata[:2]  # type: ignore[union-attr]
+    assert hands.window.printed.notice.isVisible()
+    hands.do("undo")
+    assert hands.window.session.outcome == before
 
 
 def test_the_link_pastes_too(hands: Hands) -> None:

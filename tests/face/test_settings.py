@@ -76,6 +76,50 @@ def test_the_first_start_has_the_first_size_and_choices(window: MainWindow) -> N
     assert window.session.record.choices == Choices()
 
 
+def test_an_adopted_method_stays_with_its_paper(
+    hands: Hands, open_window: Callable[..., MainWindow], at: Callable[[MainWindow], Hands]
+) -> None:
+    """A new table and the next start take what was last chosen by hand, and say so where it is unusual."""
+    window = hands.window
+    hands.choose(window.says.family, "exact")
+    hands.count("38", "374", "70", "339")
+    hands.do("paper")
+    hands.type("0.54 (0.39 to 0.73)")
+    hands.qtbot.waitUntil(window.actions_by_key["adopt"].isEnabled)
+    hands.do("adopt")
+    assert window.session.record.choices.level == 0.9
+    adopted = window.session.record.choices
+    hands.do("new")
+    assert window.session.record.choices == Choices(family="exact")
+    assert "exact" in window.printed.notice.text()
+    hands.do("undo")
+    assert window.session.record.choices == adopted
+    assert window.close()
+    second = open_window()
+    assert second.session.record.choices == Choices(family="exact")
+    assert "exact" in second.printed.notice.text()
+    again = at(second)
+    again.do("example")
+    again.do("new")
+    assert second.session.record.choices == Choices(family="exact")
+
+
+def test_a_level_that_was_adopted_can_be_chosen_by_hand(hands: Hands) -> None:
+    """Chosen from the list after an undo, it is somebody's own and goes on."""
+    window = hands.window
+    hands.count("38", "374", "70", "339")
+    hands.do("paper")
+    hands.type("0.54 (0.39 to 0.73)")
+    hands.qtbot.waitUntil(window.actions_by_key["adopt"].isEnabled)
+    hands.do("adopt")
+    adopted = window.session.record.choices
+    hands.do("undo")
+    hands.choose(window.says.family, adopted.family)
+    hands.choose(window.says.level, "90%")
+    hands.do("new")
+    assert window.session.record.choices == adopted
+
+
 DAMAGED = {
     "binary": bytes(range(256)) * 8,
     "empty": b"",

@@ -110,7 +110,7 @@ def test_tab_into_a_cell_selects_its_count(example: Hands) -> None:
 
 
 def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) -> None:
-    """From the title to the cautions, left to right and top to bottom, each control once."""
+    """From the title to the cautions, the paper's result right after the counts, each control once."""
     window, grid, rare = example.window, example.window.printed.grid, example.window.printed.rare
     assert rare.optional
     assert rare.check
@@ -119,8 +119,8 @@ def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) 
         window.printed.welcome, window.printed.event_words, window.printed.span,
         window.printed.form, window.printed.layout_choice,
         grid.headings["left"], grid.headings["right"], grid.labels["first"], grid.labels["second"],
-        *grid.cells.values(), *window.printed.links, *rare.optional.links.values(), rare.check.paper.measure,
-        rare.check.paper.text, *(example.row(key) for key in (*MEASURES, "test")),
+        *grid.cells.values(), rare.check.paper.measure, rare.check.paper.text, *window.printed.links,
+        *rare.optional.links.values(), *(example.row(key) for key in (*MEASURES, "test")),
         window.says.family, window.says.level, window.says.more, window.says.help, *window.says.copies,
         window.patient.baseline, window.patient.source, window.patient.effect, window.patient.copy, window.cautions,
     ]  # fmt: skip

@@ -39,6 +39,22 @@ def test_a_row_opens_its_working_and_closes_it(example: Hands, keys: str) -> Non
     assert not working.isVisible()
 
 
+def test_measures_under_the_fold_come_into_view(example: Hands) -> None:
+    """What "More measures" opens stands on screen, though it begins below the window's edge."""
+    window = example.window
+    window.resize(1280, 420)
+    before = set(example.rows)
+    example.do("more")
+    first = next(key for key in example.rows if key not in before)
+
+    def seen() -> bool:
+        row, port = example.row(first), window.page_scroll.viewport()
+        top = row.mapTo(port, row.rect().topLeft()).y()
+        return top >= 0 and top + row.height() < port.height()
+
+    example.qtbot.waitUntil(seen)
+
+
 def test_escape_closes_the_working(example: Hands) -> None:
     """Escape hides it from wherever the focus is, and changes nothing else."""
     example.click(example.row("odds_ratio"))

@@ -4,9 +4,10 @@ from __future__ import annotations
 
 from typing import NamedTuple
 
-from PySide6.QtGui import QAction, QKeySequence
+from PySide6.QtGui import QAction, QActionGroup, QKeySequence
 from PySide6.QtWidgets import QMainWindow, QMenu
 
+from fourcount.face.look import APPEARANCES
 from fourcount.record.outcome import FORMS
 from fourcount.wording import labels
 
@@ -36,7 +37,8 @@ COMMANDS = (
     Command("copy-picture", "edit", "Ctrl+Shift+P"),
     Command("swap", "table", "Ctrl+G"),
     Command("count-other", "table", "Ctrl+Shift+O"),
-    Command("form", "table", "Ctrl+Shift+F", parts_from_last=True),
+    Command("study", "table", "Ctrl+Shift+D", parts_from_last=True),
+    Command("form", "table", "Ctrl+Shift+F"),
     Command("layout", "table", "Ctrl+Shift+L"),
     Command("add-row", "table", "Ctrl+Return", parts_from_last=True),
     Command("remove-row", "table", "Ctrl+Shift+Del"),
@@ -110,10 +112,24 @@ def add_forms(window: QMainWindow, menu: QMenu) -> dict[str, QAction]:
     return actions
 
 
-def shortcut_table(actions: dict[str, QAction]) -> list[tuple[str, str]]:
-    """Each command's keys as the platform writes them, and its name."""
-    rows = []
+def add_appearances(window: QMainWindow, menu: QMenu, now: str) -> QActionGroup:
+    """One action for each appearance, of which one is on; an action's data is its key."""
+    group = QActionGroup(window)
+    menu.addSeparator()
+    for key in APPEARANCES:
+        action = QAction(labels.APPEARANCES[key], group)
+        action.setCheckable(True)
+        action.setData(key)
+        action.setChecked(key == now)
+        menu.addAction(action)
+    return group
+
+
+def shortcut_table(actions: dict[str, QAction]) -> dict[str, list[tuple[str, str]]]:
+    """Menu by menu, each command's keys as the platform writes them, and its name."""
+    menus: dict[str, list[tuple[str, str]]] = {}
     for command in (*COMMANDS, *FORM_COMMANDS):
         keys = actions[command.key].shortcut().toString(QKeySequence.SequenceFormat.NativeText)
-        rows.append((keys, labels.COMMANDS[command.key].replace("&", "")))
-    return rows
+        menu = labels.MENUS.get(command.menu, labels.FORM_MENU).replace("&", "")
+        menus.setdefault(menu, []).append((keys, labels.COMMANDS[command.key].replace("&", "")))
+    return menus

@@ -6,7 +6,7 @@ from typing import TYPE_CHECKING
 
 from PySide6.QtCore import Qt, Signal
 from PySide6.QtGui import QAction
-from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout
+from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout, QWidget
 
 from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.flow import FlowLayout
@@ -65,6 +65,7 @@ class AsPrinted(FieldsView):
         self.layout_choice = ChoiceField(look, labels.FIELDS["layout"], tuple(labels.LAYOUTS.items()))
         self.grid = Grid(look)
         self.notes = Words(look, "small", "caution")
+        self.notice = Words(look, "body", "ink")
         self.example = Link(look, labels.FIRST_STEP)
         self.links = [Link(look, labels.LINK_WORDS[key], actions[key], labels.LINK_NAMES.get(key, "")) for key in LINKS]
         self._build()
@@ -127,10 +128,18 @@ class AsPrinted(FieldsView):
         focus = self.window().focusWidget()
         return focus if isinstance(focus, TextField) and self.isAncestorOf(focus) else None
 
-    def show_check(self, outcome: Outcome, check: CheckFindings | None, choices: Choices) -> None:
-        """Show what the paper says and whether it adds up."""
+    def show_check(
+        self, outcome: Outcome, check: CheckFindings | None, choices: Choices
+    ) -> tuple[QWidget, QWidget] | None:
+        """Show what the paper says and whether it adds up; the field with a new answer to what is typed there."""
         if self._rare or outcome != Outcome():
-            self.rare.show_check(outcome, check, choices, self._width_of_names())
+            return self.rare.show_check(outcome, check, choices, self._width_of_names())
+        return None
+
+    def tell(self, notice: str) -> None:
+        """Say under the table what became of it."""
+        self.notice.show_words(notice)
+        self.notice.setAccessibleName(notice)
 
     def field_named(self, key: str) -> TextField | None:
         """The field of this column with a key, its row opened where it has one."""
@@ -195,6 +204,7 @@ class AsPrinted(FieldsView):
         self._column.addWidget(self.grid)
         self._column.addWidget(self.notes)
         self._column.addLayout(links)
+        self._column.addWidget(self.notice)
         self._column.addWidget(self.example)
         self._column.addStretch(1)
         self._on_look_changed()

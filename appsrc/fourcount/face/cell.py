@@ -65,7 +65,7 @@ class CountCell(TextField):
         """Set a long text in a smaller size, so that it is seen whole."""
         left, right = (2, 4) if self._compact else (6, 8)
         self.setTextMargins(self._look.px(left), 0, self._look.px(right), 0)
-        room = self.width() - self._look.px(left + right + 4) - (self._look.px(8) if self.marked else 0)
+        room = self.width() - self._look.px(left + right + 4)
         for role in COMPACT_ROLES if self._compact else CELL_ROLES:
             font = self._look.font(role)
             if QFontMetrics(font).horizontalAdvance(self.text()) <= room:
@@ -87,8 +87,14 @@ class CountCell(TextField):
         painter.setPen(QPen(self._look.colour(part), width))
         inset = width / 2
         painter.drawRoundedRect(QRectF(self.rect()).adjusted(inset, inset, -inset, -inset), 4, 4)
-        text = self.fontMetrics().horizontalAdvance(self.text())
-        if self.marked and text + self._look.px(28) < self.width():
-            painter.setFont(self._look.font("strong"))
-            painter.drawText(self.rect().adjusted(8, 0, 0, 0), Qt.AlignmentFlag.AlignVCenter, "!")
+        if self.marked:
+            self._draw_mark(painter)
         painter.end()
+
+    def _draw_mark(self, painter: QPainter) -> None:
+        """An exclamation mark before the text, or small in the corner where the text leaves no room."""
+        text = self.fontMetrics().horizontalAdvance(self.text())
+        beside = text + self._look.px(28) < self.width()
+        painter.setFont(self._look.font("strong" if beside else "small"))
+        place = Qt.AlignmentFlag.AlignVCenter if beside else Qt.AlignmentFlag.AlignTop
+        painter.drawText(self.rect().adjusted(8 if beside else 4, 0 if beside else 1, 0, 0), place, "!")

@@ -5,7 +5,7 @@ from __future__ import annotations
 from itertools import pairwise
 from typing import NamedTuple
 
-from PySide6.QtCore import QRect, QSize, Qt
+from PySide6.QtCore import QCoreApplication, QEvent, QPoint, QRect, QSize, Qt, QTimer
 from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QFrame, QScrollArea, QWidget
 
@@ -16,6 +16,10 @@ from fourcount.face.scroll_bar import ScrollBar
 THREE_FROM = 1150
 TWO_FROM = 880
 """Widths of the page, at 100% text, from which three columns or two stand side by side."""
+
+
+MARGIN = 8
+"""Pixels that stay free above and below what is brought into view."""
 
 
 class Arrangement(NamedTuple):
@@ -108,14 +112,38 @@ class Page(QWidget):
 
 
 class PageScroll(QScrollArea):
-    """Holds the page, as wide as the window and as tall as it needs."""
+    """Holds the page, as wide as the window and as tall as it needs.
+
+    Where large text needs more width than a narrow window has, a bar at the foot moves the page sideways.
+    """
 
     def __init__(self, look: Look, page: Page) -> None:
         super().__init__()
         self.setFrameShape(QFrame.Shape.NoFrame)
         self.setWidgetResizable(True)
         self.setVerticalScrollBar(ScrollBar(look))
+        self.setHorizontalScrollBar(ScrollBar(look, Qt.Orientation.Horizontal))
         self.setVerticalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOn)
-        self.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
         self.setFocusPolicy(Qt.FocusPolicy.NoFocus)
         self.setWidget(page)
+        self._page = page
+        self._wanted: tuple[QWidget, QWidget] | None = None
+
+    def bring(self, first: QWidget, last: QWidget) -> None:
+        """Bring two widgets and all between them into view once they are laid out; the first where both is too much."""
+        self._wanted = (first, last)
+        QTimer.singleShot(0, self._on_laid_out)
+
+    def _on_laid_out(self) -> None:
+        wanted, self._wanted = self._wanted, None
+        if wanted is None:
+            return
+        QCoreApplication.sendPostedEvents(None, QEvent.Type.LayoutRequest)
+        first, last = wanted
+        page, bar = self._page, self.verticalScrollBar()
+        top = first.mapTo(page, QPoint(0, 0)).y() - MARGIN
+        bottom = last.mapTo(page, QPoint(0, last.height())).y() + MARGIN
+        if bottom > bar.value() + self.viewport().height():
+            bar.setValue(bottom - self.viewport().height())
+        if top < bar.value():
+            bar.setValue(top)

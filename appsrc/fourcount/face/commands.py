@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 from collections.abc import Callable
 from typing import TYPE_CHECKING, Any, cast
 
@@ -10,10 +11,11 @@ from PySide6.QtGui import QGuiApplication
 from PySide6.QtWidgets import QWidget
 
 from fourcount.face import clipboard, dialogs
+from fourcount.face.own_choices import OwnChoices
 from fourcount.face.session import Session
 from fourcount.ink.style import Style
 from fourcount.record import editing
-from fourcount.record.outcome import Design, Effect, Form, Layout, Outcome, PaperMeasure, form_of
+from fourcount.record.outcome import CELLS, Design, Effect, Form, Layout, Outcome, PaperMeasure, form_of
 from fourcount.record.paper import Choices, Family, Record
 from fourcount.wording import labels, numbers
 
@@ -37,8 +39,7 @@ CHOOSING: dict[str, Callable[..., Any]] = {
 USUAL_MEASURES = ("risk_ratio", "odds_ratio", "rate_ratio")
 """What papers mostly print; another choice was somebody's own."""
 
-EFFECT_FIELDS = ("paper_text", "adjusted_text", "adjusted_for_text")
-"""Fields in which a printed effect is what belongs there, not a table to fill."""
+NUMBERS = re.compile(r"\d+")
 
 
 class Commands(QObject):
@@ -46,13 +47,15 @@ class Commands(QObject):
 
     **Signals**
         cell_wanted: the table begins anew; bring the cursor to its first cell.
-        noticed: a short notice of what was just done. Carries its sentence.
+        noticed: a short notice of what was just copied. Carries its sentence.
+        told: a short notice of what became of the table. Carries its sentence.
         paste_offered: a paste might be understood otherwise; show it before it is taken. Carries the ``Pasted``.
         pasted: a paste filled the table.
     """
 
     cell_wanted = Signal()
     noticed = Signal(str)
+    told = Signal(str)
     paste_offered = Signal(object)
     pasted = Signal()
 
@@ -62,12 +65,13 @@ class Commands(QObject):
         self._style = style
         self._window = window
         self.picture: PictureView | None = None
+        self.own = OwnChoices(session)
         self._origin = session.outcome
         self._stepped: tuple[str, Outcome] | None = None
 
     def new_table(self) -> None:
-        """Begin with an empty record that keeps the choice of intervals; undo brings the last one back."""
-        self._session.change_record(Record(choices=self._session.record.choices))
+        """Begin with an empty record and the intervals last chosen by hand; undo brings the last one back."""
+        self._session.change_record(Record(choices=self.own.choices))
         self.cell_wanted.emit()
         self.tell_unusual_choices()
 
@@ -75,6 +79,7 @@ class Commands(QObject):
         """Show the worked example with its own choice of intervals; undo brings the last record back."""
         from fourcount.wording.example import worked_example
 
+        self.own.bring(worked_example().choices)
         self._session.change_record(worked_example())
         self.cell_wanted.emit()
 
@@ -82,7 +87,7 @@ class Commands(QObject):
         """Make the other group the index group; a typed starting risk stays, and now stands for the other group."""
         self._session.change_outcome(editing.swap_groups(self._session.outcome))
         if self._session.outcome.patient.starting_risk_text.strip():
-            self.noticed.emit(labels.RISK_OF_OTHER_GROUP)
+            self.told.emit(labels.RISK_OF_OTHER_GROUP)
 
     def count_other_outcome(self) -> None:
         """Count the other column."""
@@ -117,6 +122,11 @@ class Commands(QObject):
         outcome = _fitting_measure(change(self._origin))
         self._stepped = (kind, outcome)
         self._session.change_outcome(outcome)
+        if kind == "form" and outcome.design != now.design:
+            self.told.emit(labels.STUDY_FOLLOWED.format(study=labels.DESIGNS[outcome.design]))
+        if kind == "design" and form_of(outcome.table) != form_of(now.table):
+            form = form_of(outcome.table)
+            self.told.emit(labels.FORM_FOLLOWED.format(specimen=labels.FORMS[form], note=labels.FORM_NOTES[form]))
 
     def choose(self, field: str, choice: object) -> None:
         """Take what was chosen in one of the column's rarer choices."""
@@ -135,7 +145,9 @@ class Commands(QObject):
         if found and found.adopt:
             family, level = found.adopt
             record = editing.with_level(self._session.record, level)
-            self._session.change_record(editing.with_family(record, cast("Family", family)))
+            record = editing.with_family(record, cast("Family", family))
+            self.own.bring(record.choices)
+            self._session.change_record(record)
 
     def choose_layout(self, key: Layout) -> None:
         """Run the groups down or across."""
@@ -147,11 +159,15 @@ class Commands(QObject):
 
     def choose_family(self, key: Family) -> None:
         """Take a family of intervals."""
-        self._session.change_record(editing.with_family(self._session.record, key))
+        self._take_own(editing.with_family(self._session.record, key))
 
     def choose_level(self, level: float) -> None:
         """Take a confidence level, a fraction."""
-        self._session.change_record(editing.with_level(self._session.record, level))
+        self._take_own(editing.with_level(self._session.record, level))
+
+    def _take_own(self, record: Record) -> None:
+        self.own.choose(record.choices)
+        self._session.change_record(record)
 
     def copy_text(self) -> None:
         """Copy the findings as text."""
@@ -173,22 +189,31 @@ class Commands(QObject):
         """Fill the table from a text that was pasted into a field; False where the text belongs into the field."""
         if len(text.split()) < 2 and "," not in text:
             return False  # one word or one number
+        from fourcount.record.editing.pasted_row import pasted_row
         from fourcount.record.entry.paste import read_paste
+        from fourcount.wording.printed_labels import ROW_PASTED
 
+        outcome, into_cell = self._session.outcome, field.rsplit(".", maxsplit=1)[-1] in CELLS
+        row = pasted_row(outcome, field, text)
+        if row is not None:
+            self._session.change_outcome(row)
+            self.told.emit(ROW_PASTED.format(number=int(field.split(".")[1]) + 1))
+            return True
         pasted = read_paste(text)
-        if pasted is None or (pasted.form == "effect-only" and field in EFFECT_FIELDS):
-            return False
+        if pasted is None or (pasted.form == "effect-only" and not into_cell):
+            return False  # an effect alone is text among words, and where printed effects stand
         self._offer_or_take(pasted)
         return True
 
     def paste(self) -> None:
         """Fill the table from the clipboard, wherever the cursor is."""
         from fourcount.record.entry.paste import read_paste
-        from fourcount.wording.printed_labels import NO_TABLE_PASTED
+        from fourcount.wording.printed_labels import COUNTS_NOT_UNDERSTOOD, NO_TABLE_PASTED
 
-        pasted = read_paste(QGuiApplication.clipboard().text())
+        text = QGuiApplication.clipboard().text()
+        pasted = read_paste(text)
         if pasted is None:
-            self.noticed.emit(NO_TABLE_PASTED)
+            self.told.emit(COUNTS_NOT_UNDERSTOOD if len(NUMBERS.findall(text)) > 1 else NO_TABLE_PASTED)
         else:
             self._offer_or_take(pasted)
 
@@ -199,7 +224,7 @@ class Commands(QObject):
         before = self._session.outcome
         self._session.change_outcome(editing.take_paste(before, pasted))
         self.pasted.emit()
-        self.noticed.emit(filled(before, self._session.outcome))
+        self.told.emit(filled(before, self._session.outcome))
 
     def _offer_or_take(self, pasted: Pasted) -> None:
         from fourcount.record.entry.turning import in_chosen_form
@@ -215,7 +240,7 @@ class Commands(QObject):
         choices = self._session.record.choices
         if choices != Choices():
             level = numbers.level(choices.level)
-            self.noticed.emit(labels.CHOICES_AS_LAST.format(family=labels.FAMILIES[choices.family], level=level))
+            self.told.emit(labels.CHOICES_AS_LAST.format(family=labels.FAMILIES[choices.family], level=level))
 
     def _tell(self, key: str, done: bool) -> None:
         self.noticed.emit(labels.COPIED[key] if done else labels.NOTHING_TO_COPY)
@@ -230,7 +255,7 @@ class Commands(QObject):
         while (text := dialogs.ask_level(self._window, now, problem)) is not None:
             reading = read_level(text)
             if isinstance(reading, Proportion):
-                self._session.change_record(editing.with_level(self._session.record, reading.value))
+                self.choose_level(reading.value)
                 break
             now, problem = text, mark_text(reading) if isinstance(reading, Unreadable) else ""
 
@@ -246,7 +271,7 @@ def _fitting_measure(outcome: Outcome) -> Outcome:
     """While the paper says nothing yet, the measure that papers print of such a table."""
     if outcome.paper_text.strip() or outcome.paper_measure not in USUAL_MEASURES:
         return outcome
-    odds = outcome.design in ("case-control", "matched")
-    rates = form_of(outcome.table) == "person-time"
+    form = form_of(outcome.table)
+    odds, rates = outcome.design in ("case-control", "matched") or form == "effect-only", form == "person-time"
     measure: PaperMeasure = "rate_ratio" if rates else "odds_ratio" if odds else "risk_ratio"
     return editing.with_paper_measure(outcome, measure)

@@ -8,7 +8,7 @@ from PySide6.QtCore import QObject, Qt
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QWidget
 
-from fourcount.face.fields import TextField
+from fourcount.face.fields import ChoiceField, TextField
 
 if TYPE_CHECKING:
     from fourcount.face.window import MainWindow
@@ -46,8 +46,11 @@ class CursorKeeper(QObject):
 
     def to_form(self) -> None:
         """Go to the choice of the form of print, and open it."""
-        self._window.printed.form.setFocus(Qt.FocusReason.ShortcutFocusReason)
-        self._window.printed.form.showPopup()
+        self._open(self._window.printed.form)
+
+    def to_study(self) -> None:
+        """Go to the choice of the kind of study, and open it."""
+        self._open(self._window.printed.design)
 
     def form_chosen(self, action: QAction) -> None:
         """Take a form from the menu, and go to where it begins."""
@@ -67,6 +70,7 @@ class CursorKeeper(QObject):
     def paste_offered(self, pasted: Pasted) -> None:
         """Show what a paste was understood as, and remember where the cursor was."""
         self._before_paste = self._window.focusWidget()
+        self._window.printed.tell("")
         self._window.printed.rare.offer(pasted, self._window.session.outcome)
 
     def paste_over(self) -> None:
@@ -76,6 +80,11 @@ class CursorKeeper(QObject):
             before.setFocus(Qt.FocusReason.OtherFocusReason)
         elif before is not None:
             self.to_first_cell()
+
+    def _open(self, choice: ChoiceField) -> None:
+        choice.setFocus(Qt.FocusReason.ShortcutFocusReason)
+        self._window.page_scroll.ensureWidgetVisible(choice)
+        choice.showPopup()
 
     def _go_to(self, field: TextField) -> None:
         field.setFocus(Qt.FocusReason.ShortcutFocusReason)

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Sequence
+from collections.abc import Mapping, Sequence
 from typing import TYPE_CHECKING
 
 from PySide6.QtWidgets import QWidget
@@ -67,16 +67,19 @@ def methods_window(look: Look, parent: QWidget) -> HelpWindow:
     return _window(look, parent, labels.HELP_TITLES["methods"], parts)
 
 
-def keys_window(look: Look, parent: QWidget, shortcuts: Sequence[tuple[str, str]]) -> HelpWindow:
-    """The keys of every command, as this platform writes them."""
+def keys_window(look: Look, parent: QWidget, menus: Mapping[str, Sequence[tuple[str, str]]]) -> HelpWindow:
+    """The keys of every command, menu by menu, as this platform writes them."""
     from PySide6.QtGui import QKeySequence
 
     parts: list[Part] = [("body", labels.KEYS_INTRO)]
     paste = QKeySequence(QKeySequence.StandardKey.Paste).toString(QKeySequence.SequenceFormat.NativeText)
     more = [(keys.format(paste=paste), words) for keys, words in labels.KEYS_MORE]
-    for keys, words in (*more, *shortcuts):
-        parts.append(("body", f"{keys or labels.NO_KEYS}\t{words}"))
-    return _window(look, parent, labels.HELP_TITLES["keys"], parts)
+    for menu, commands in {labels.KEYS_ANYWHERE: more, **menus}.items():
+        parts.append(("strong", menu))
+        parts.extend(("body", f"{keys or labels.NO_KEYS}\t{words}") for keys, words in commands)
+    window = _window(look, parent, labels.HELP_TITLES["keys"], parts)
+    window.fit_height()
+    return window
 
 
 def about_window(look: Look, parent: QWidget) -> HelpWindow:

@@ -84,6 +84,7 @@ class ForOnePatient(FieldsView):
         super().__init__()
         self._look = look
         self._bars = False
+        self.takes_a_risk = True
         self.setAccessibleName(labels.COLUMNS["patient"])
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self.baseline = TextField(look, "starting_risk_text", labels.FIELDS["starting_risk_text"], role="total")
@@ -131,6 +132,9 @@ class ForOnePatient(FieldsView):
         self.effect.show_words(view.effect_words)
         self.effect.show_choice(view.effect)
         self.effect.setEnabled(view.effect_is_free)
+        self.takes_a_risk = view.takes_a_risk
+        for widget in (*self._names, self.baseline, self.source, self.effect):
+            widget.setVisible(view.takes_a_risk)
         self.baseline.show_mark(view.mark)
         self.mark.show_words(view.mark)
         self.waits.show_words(view.waits)
@@ -144,8 +148,9 @@ class ForOnePatient(FieldsView):
         self._fields.setContentsMargins(0, 0, 0, 0)
         self._fields.setColumnStretch(1, 1)
         names = ("starting_risk_text", "starting_risk_source_text", "effect")
-        for row, name in enumerate(names):
-            self._fields.addWidget(Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False), row, 0)
+        self._names = [Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False) for name in names]
+        for row, words in enumerate(self._names):
+            self._fields.addWidget(words, row, 0)
         self._fields.addWidget(self.baseline, 0, 1)
         self._fields.addWidget(self.source, 1, 1)
         self._fields.addWidget(self.effect, 2, 1)

@@ -95,6 +95,8 @@ class Grid(FieldsView):
         if field not in self.notes:
             self.notes[field] = self._small(RIGHT)
             self.notes[field].setContentsMargins(0, 0, 0, 4)
+            self.notes[field].setWordWrap(True)
+            self.notes[field].setMinimumWidth(0)
             self._dress()
         return self.notes[field]
 

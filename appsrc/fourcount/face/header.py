@@ -41,7 +41,7 @@ class Header(FieldsView):
             look, "title_text", labels.FIELDS["title_text"], labels.HINTS["title_text"], role="strong"
         )
         self.source = QuietField(look, "source_text", labels.FIELDS["source_text"], labels.HINTS["source_text"])
-        self.notice = Words(look, "body", "muted", " ", wraps=False)
+        self.notice = Words(look, "body", "ink", " ", wraps=False)
         self._timer = QTimer(self)
         self._timer.setSingleShot(True)
         self._timer.setInterval(NOTICE_STAYS)

@@ -52,6 +52,12 @@ class HelpWindow(QDialog):
             self._add(cursor, role, words, first=i == 0)
         self.text.moveCursor(QTextCursor.MoveOperation.Start)
 
+    def fit_height(self) -> None:
+        """Be as tall as the text is, where the screen has room for it."""
+        room = self.screen().availableSize().height() - self._look.px(80)
+        self.text.document().setTextWidth(self.width() - self._look.px(48))
+        self.resize(self.width(), min(round(self.text.document().size().height()) + self._look.px(80), room))
+
     def _add(self, cursor: QTextCursor, role: Role, words: str, first: bool) -> None:
         block = QTextBlockFormat()
         block.setTopMargin(0 if first else self._look.px(16 if role in ("strong", "figure") else 4))

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from PySide6.QtCore import QSize, Qt
+from PySide6.QtCore import QRect, QSize, Qt
 from PySide6.QtGui import QAction, QKeyEvent, QPainter, QPaintEvent, QPen
 from PySide6.QtWidgets import QAbstractButton, QSizePolicy
 
@@ -54,12 +54,14 @@ class Link(QAbstractButton):
         font.setUnderline(self.underMouse() or self.hasFocus())
         painter.setFont(font)
         painter.setPen(QPen(self._look.colour("accent")))
-        words = self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, self.width())
-        painter.drawText(self.rect(), self._alignment(), words)
+        painter.drawText(self.rect(), self._alignment(), self._shown_words())
         if self.hasFocus():
             painter.setPen(QPen(self._look.colour("accent"), 1, Qt.PenStyle.DotLine))
             painter.drawRect(self.rect().adjusted(0, 0, -1, -1))
         painter.end()
+
+    def _shown_words(self) -> str:
+        return self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, self.width())
 
     def _alignment(self) -> Qt.AlignmentFlag:
         return Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter
@@ -67,3 +69,29 @@ class Link(QAbstractButton):
     def _on_look_changed(self) -> None:
         self.setFont(self._look.font("body"))
         self.updateGeometry()
+
+
+class WrappedLink(Link):
+    """A command of several words, which goes on in another line where a column is narrow."""
+
+    def __init__(self, look: Look, words: str, action: QAction | None = None, name: str = "") -> None:
+        super().__init__(look, words, action, name)
+        policy = QSizePolicy(QSizePolicy.Policy.Preferred, QSizePolicy.Policy.Minimum)
+        policy.setHeightForWidth(True)
+        self.setSizePolicy(policy)
+
+    def hasHeightForWidth(self) -> bool:
+        return True
+
+    def heightForWidth(self, width: int) -> int:
+        words = self.fontMetrics().boundingRect(QRect(0, 0, width, 10_000), self._alignment(), self.text())
+        return max(words.height(), self._look.px(26))
+
+    def minimumSizeHint(self) -> QSize:
+        return QSize(self._look.px(40), self.heightForWidth(max(self.width(), self._look.px(40))))
+
+    def _shown_words(self) -> str:
+        return self.text()
+
+    def _alignment(self) -> Qt.AlignmentFlag:
+        return super()._alignment() | Qt.AlignmentFlag(Qt.TextFlag.TextWordWrap)

@@ -15,7 +15,7 @@ from fourcount.appraisal.findings import (
 from fourcount.ink.picture import KeyEntry, Picture, PictureWords, Side
 from fourcount.picture.plan import Plan, plan
 from fourcount.picture.scales import risk_scale
-from fourcount.record.outcome import COUNTED_FORMS, FORMS, Effect, Outcome
+from fourcount.record.outcome import COUNTED_FORMS, FORMS, Effect, Form, Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import labels, numbers
 from fourcount.wording.axis import axis_words
@@ -27,6 +27,9 @@ from fourcount.wording.patient import WHICH_PEOPLE, PatientWords, patient_words
 WAITS = {form: labels.PATIENT_WAITS_OTHERWISE for form in FORMS if form not in COUNTED_FORMS}
 """What the column says while the table is not whole, where that is not four counts."""
 
+CARRY_NOTHING: tuple[Form, ...] = ("pairs", "person-time")
+"""Forms of which nothing is carried to one patient, whatever is typed."""
+
 
 class PatientView(NamedTuple):
     """Everything that the column shows."""
@@ -36,6 +39,7 @@ class PatientView(NamedTuple):
     effect: str
     effect_words: dict[str, str]
     effect_is_free: bool
+    takes_a_risk: bool = True
     mark: str = ""
     waits: str = ""
     picture: Picture | None = None
@@ -53,6 +57,7 @@ def patient_view(outcome: Outcome, findings: OutcomeFindings, choices: Choices, 
         effect=_effect(outcome, findings),
         effect_words=_effect_words(outcome, findings),
         effect_is_free=outcome.design != "case-control" and findings.form in (*COUNTED_FORMS, "strata"),
+        takes_a_risk=_takes_a_risk(findings),
         mark=marks.get("starting_risk_text", ""),
     )
     if lacking(findings) is not None:
@@ -109,6 +114,12 @@ def _picture_words(words: PatientWords, lines: tuple[str, ...], drawn: Plan) -> 
         lines=tuple(line for line in lines if line),
         bar_ends=(low, high),
     )
+
+
+def _takes_a_risk(findings: OutcomeFindings) -> bool:
+    """Whether a starting risk would come to anything: some forms carry nothing to a patient."""
+    gap = findings.patient
+    return findings.form not in CARRY_NOTHING and not (isinstance(gap, Gap) and gap.key == "carried-later")
 
 
 def _own_risk(outcome: Outcome, findings: OutcomeFindings) -> bool:

@@ -61,6 +61,7 @@ class RareParts(FieldsView):
         self._printed_row = row
         self._alone = False
         self._asked_for = False
+        self._before_paper: QWidget | None = None
         self.strata: StrataRows | None = None
         self.row_links: RowLinks | None = None
         self.rows_as: ChoiceField | None = None
@@ -91,18 +92,28 @@ class RareParts(FieldsView):
             self.optional.setVisible(not blank)
             self.optional.show_state(outcome, width)
 
-    def show_check(self, outcome: Outcome, check: CheckFindings | None, choices: Choices, width: int) -> None:
-        """Show what the paper says and whether it adds up, as soon as anything is there to compare."""
+    def show_check(
+        self, outcome: Outcome, check: CheckFindings | None, choices: Choices, width: int
+    ) -> tuple[QWidget, QWidget] | None:
+        """Show what the paper says and whether it adds up, as soon as anything is there to compare.
+
+        Where the answer is another one and the cursor stands in a printed effect, its field and the check are given.
+        """
         blank = outcome == Outcome() and not self._asked_for
         if self.check is None and blank:
-            return
+            return None
         view = self.check or self._make_check()
         view.setVisible(not blank)
+        before = view.answer
         view.show_state(outcome, check, choices, width)
         alone = isinstance(outcome.table, EffectOnly)
         if alone != self._alone:
             self._alone = alone
             self._move_paper(view)
+        elif self._last_of_table() is not self._before_paper:
+            self._chain_paper()
+        focus = next((field for field in self.fields_after if field.hasFocus()), None)
+        return (focus, view) if focus and view.answer != before else None
 
     def _move_paper(self, view: CheckView) -> None:
         """Put the line of what the paper says in the table's place, or back; a cursor in it stays there."""
@@ -237,16 +248,20 @@ class RareParts(FieldsView):
         return self.check
 
     def _chain_paper(self) -> None:
-        """Tab reaches what the paper says where it stands: in the table's place, or at the foot."""
+        """Tab reaches what the paper says right after the table, or in its place: the links are seldom needed."""
         if self.check is None:
             return
         foot = self.optional.last_stop if self.optional else self._stops.foot
-        paper = (self.check.paper.measure, *self.check.paper.fields)
+        self._before_paper = self._last_of_table()
+        chain(self._before_paper, self.check.paper.measure, *self.check.paper.fields, self.check.adopt)
         if self._alone:
-            chain(self._stops.table, *paper)
             chain(foot, self.check.adopt)
-        else:
-            chain(foot, *paper, self.check.adopt)
+
+    def _last_of_table(self) -> QWidget:
+        """Where typing a table ends: what the paper says of it comes next."""
+        if self.strata and not self.strata.isHidden():
+            return self.strata.last_stop
+        return self._stops.table if self._alone else self._stops.under
 
     def _place_of_table(self) -> int:
         """Right under the grid, where whatever stands in its stead goes."""

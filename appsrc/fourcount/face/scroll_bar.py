@@ -10,18 +10,19 @@ from fourcount.face.look import Look
 
 
 class ScrollBar(QScrollBar):
-    """A vertical bar drawn in the palette's outline.
+    """A bar drawn in the palette's outline.
 
-    It always keeps its room and is empty where there is nothing to scroll: a bar that came and went would change the
-    width of the text, and with it the height that decides whether the bar is needed.
+    An upright one always keeps its room and is empty where there is nothing to scroll: a bar that came and went would
+    change the width of the text, and with it the height that decides whether the bar is needed.
     """
 
-    def __init__(self, look: Look) -> None:
-        super().__init__(Qt.Orientation.Vertical)
+    def __init__(self, look: Look, orientation: Qt.Orientation = Qt.Orientation.Vertical) -> None:
+        super().__init__(orientation)
         self._look = look
 
     def sizeHint(self) -> QSize:
-        return QSize(12, super().sizeHint().height())
+        hint = super().sizeHint()
+        return QSize(12, hint.height()) if self.orientation() == Qt.Orientation.Vertical else QSize(hint.width(), 12)
 
     def paintEvent(self, event: QPaintEvent) -> None:
         if self.maximum() == self.minimum():
@@ -40,5 +41,7 @@ class ScrollBar(QScrollBar):
         painter.fillRect(self.rect(), self._look.colour("page"))
         painter.setPen(Qt.PenStyle.NoPen)
         painter.setBrush(self._look.colour("outline"))
-        painter.drawRoundedRect(QRectF(handle).adjusted(3, 0, -3, 0), 3, 3)
+        upright = self.orientation() == Qt.Orientation.Vertical
+        slim = QRectF(handle).adjusted(3, 0, -3, 0) if upright else QRectF(handle).adjusted(0, 3, 0, -3)
+        painter.drawRoundedRect(slim, 3, 3)
         painter.end()

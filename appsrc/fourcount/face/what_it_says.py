@@ -86,11 +86,14 @@ class WhatItSays(QWidget):
         self.sentence.show_words(headline(outcome, findings, record.choices))
         self._show_rows()
 
-    def set_more(self, more: bool) -> None:
-        """Show or hide the measures under the fold."""
+    def set_more(self, more: bool) -> tuple[QWidget, QWidget] | None:
+        """Show or hide the measures under the fold; the first and the last row that is new."""
+        before = self._order
         self._show_more = more
         self.more.show_words(labels.LINKS["less" if more else "more"])
         self._show_rows()
+        new = [self._rows[key] for key in self._order if key not in before]
+        return (new[0], new[-1]) if new else None
 
     def close_working(self) -> bool:
         """Hide an open working; whether there was one."""

@@ -7,7 +7,7 @@ from itertools import pairwise
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer, Signal
-from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QIcon, QKeyEvent, QPaintEvent, QResizeEvent
+from PySide6.QtGui import QAction, QCloseEvent, QIcon, QKeyEvent, QPaintEvent, QResizeEvent
 from PySide6.QtWidgets import QApplication, QMainWindow, QVBoxLayout, QWidget
 
 from fourcount.face import actions as commands_table
@@ -18,7 +18,7 @@ from fourcount.face.columns import Page, PageScroll
 from fourcount.face.for_one_patient import ForOnePatient
 from fourcount.face.header import Banner, Hairline, Header
 from fourcount.face.later import Later
-from fourcount.face.look import APPEARANCES, Look
+from fourcount.face.look import Look
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
@@ -78,7 +78,7 @@ class MainWindow(QMainWindow):
         self.setMinimumSize(SMALLEST_SIZE)
         self.resize(FIRST_SIZE.boundedTo(self.screen().availableSize() - ROOM_FOR_A_FRAME))
         self.menus = commands_table.fill_menus(self, self.actions_by_key)
-        self._appearances = self._appearance_actions()
+        self._appearances = commands_table.add_appearances(self, self.menus["view"], self.look.appearance)
         inside = QWidget()
         column = QVBoxLayout(inside)
         column.setContentsMargins(0, 0, 0, 0)
@@ -95,18 +95,6 @@ class MainWindow(QMainWindow):
         geometry = self._settings.geometry()
         if not geometry.isEmpty():
             self.restoreGeometry(geometry)
-
-    def _appearance_actions(self) -> QActionGroup:
-        group = QActionGroup(self)
-        menu = self.menus["view"]
-        menu.addSeparator()
-        for key in APPEARANCES:
-            action = QAction(labels.APPEARANCES[key], group)
-            action.setCheckable(True)
-            action.setData(key)
-            action.setChecked(key == self.look.appearance)
-            menu.addAction(action)
-        return group
 
     def _set_tab_order(self) -> None:
         """Cells in reading order right after the words above them."""
@@ -158,12 +146,14 @@ class MainWindow(QMainWindow):
         self.patient.effect_chosen.connect(do.choose_effect)
         do.cell_wanted.connect(go.to_first_cell)
         do.noticed.connect(self.header.tell)
+        do.noticed.connect(self.banner.hide)
+        do.told.connect(self._on_told)
         self.session.focus_wanted.connect(go.focus_wanted)
         handlers = {
             "new": do.new_table, "example": do.open_example, "quit": self.close, "undo": self.session.undo,
             "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
             "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
-            "paste": do.paste, "form": go.to_form, "add-row": go.add_row,
+            "paste": do.paste, "study": go.to_study, "form": go.to_form, "add-row": go.add_row,
             "remove-row": go.remove_row, "adopt": self._on_adopt, "paper": go.to_paper, "level": do.ask_level,
             "layout": do.change_layout, "clear": do.clear_counts,
             "first-cell": go.to_first_cell, "baseline": go.to_baseline, "bigger": self._on_bigger,
@@ -181,9 +171,6 @@ class MainWindow(QMainWindow):
         """Show a record and its findings in every view; ask for what follows later."""
         outcome = self.session.outcome
         self.header.show_state(record)
-        if record is not self._shown:
-            self.header.tell("")
-        self._shown = record
         self.printed.show_state(outcome, findings)
         if self.checking:
             self.checking.follow()
@@ -195,15 +182,27 @@ class MainWindow(QMainWindow):
         self.actions_by_key["redo"].setEnabled(self.session.can_redo)
         for key in ("add-row", "remove-row"):
             self.actions_by_key[key].setEnabled(isinstance(outcome.table, Strata))
+        self.actions_by_key["baseline"].setEnabled(self.patient.takes_a_risk)
         title = record.title_text.strip()
         self.setWindowTitle(labels.TITLED_WINDOW.format(title=title) if title else labels.WINDOW_TITLE)
+        if record is not self._shown:
+            self._shown = record
+            self._end_notices()
         self._ask_for_the_rest()
+
+    def _end_notices(self) -> None:
+        """What was told of the last state says nothing of a new one."""
+        self.header.tell("")
+        self.printed.tell("")
+        self.banner.hide()
 
     def _show_check(self) -> None:
         """Show what the paper says, and what the last check found."""
         found = self.checking.found if self.checking else None
         choices = self.session.record.choices
-        self.printed.show_check(self.session.outcome, found, choices)
+        answer = self.printed.show_check(self.session.outcome, found, choices)
+        if answer:
+            self.page_scroll.bring(*answer)
         new = bool(found and found.adopt and found.adopt != (choices.family, choices.level))
         self.actions_by_key["adopt"].setEnabled(new)
 
@@ -240,14 +239,9 @@ class MainWindow(QMainWindow):
         if self._has_work() and not dialogs.may_discard(self):
             event.ignore()
             return
-        record = self.session.record
-        self._settings.keep(
-            geometry=self.saveGeometry(),
-            zoom=self.look.zoom,
-            appearance=self.look.appearance,
-            family=record.choices.family,
-            level=record.choices.level,
-        )
+        own = self.commands.own.choices if self.checking else self.session.record.choices
+        self._settings.keep(geometry=self.saveGeometry(), zoom=self.look.zoom, appearance=self.look.appearance)
+        self._settings.keep(family=own.family, level=own.level)
         self._later.close()
         super().closeEvent(event)
 
@@ -296,6 +290,10 @@ class MainWindow(QMainWindow):
     def _on_adopt(self) -> None:
         self.commands.adopt(self.checking.found if self.checking else None)
 
+    def _on_told(self, notice: str) -> None:
+        self.printed.tell(notice)
+        self.page_scroll.bring(self.printed.notice, self.printed.notice)
+
     def _on_bigger(self) -> None:
         self.look.step_zoom(1)
 
@@ -309,7 +307,9 @@ class MainWindow(QMainWindow):
         self.patient.set_bars(checked)
 
     def _on_more(self, checked: bool) -> None:
-        self.says.set_more(checked)
+        new = self.says.set_more(checked)
+        if new:
+            self.page_scroll.bring(*new)
 
     def _on_methods(self) -> None:
         dialogs.methods_window(self.look, self).show()

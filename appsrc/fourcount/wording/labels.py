@@ -47,7 +47,7 @@ HINTS = {
     "right_heading_cases": "controls",
     "left_heading_exposed": "exposed",
     "right_heading_exposed": "not exposed",
-    "unit_text": "“person-years”",
+    "unit_text": "unit of time",
     "limits_level_text": "95%",
     "paper_text": "“0.54 (0.37 to 0.78)”",
     "adjusted_for_text": "for “age, sex”, or not at all",
@@ -143,6 +143,7 @@ COMMANDS = {
     "swap": "&Swap groups",
     "count-other": "&Count the other outcome",
     "paste": "Paste a ta&ble or a sentence",
+    "study": "Choose the kind of st&udy",
     "form": "Choose &how it is printed",
     "add-row": "Add a row to &the strata",
     "remove-row": "Remove the row &from the strata",
@@ -178,7 +179,7 @@ LINK_NAMES = {"count-other": "Count the other outcome"}
 
 LINK_WORDS = {
     "swap": "Swap groups",
-    "count-other": "Count the other",
+    "count-other": "Other outcome",
     "clear": "Clear",
     "paste": "Paste…",
     "copy-text": "Copy as text",
@@ -194,7 +195,9 @@ COPIED = {
 NOTHING_PASTED = "The table holds what was pasted already."
 NOTHING_TO_COPY = "Nothing copied: the table is not whole."
 RISK_OF_OTHER_GROUP = "The starting risk now stands for the other group."
-CHOICES_AS_LAST = "Intervals as last used: {family}, {level}."
+CHOICES_AS_LAST = "Intervals as last chosen: {family}, {level}."
+STUDY_FOLLOWED = "The study is now a {study}."
+FORM_FOLLOWED = "Printed as is now: {specimen}, {note}."
 OWN_RISK_SOURCE = "this study’s reference group"
 
 CLOSE_TITLE = "Close Fourcount?"
@@ -214,6 +217,7 @@ UNEXPECTED_NO_LOG = "Something unexpected happened ({name}); your table is untou
 DISMISS = "Dismiss"
 
 KEYS_INTRO = "Tab goes through the fields in reading order. In the table, arrow keys and Enter go from count to count."
+KEYS_ANYWHERE = "In the fields"
 KEYS_MORE = (
     ("Tab, Shift+Tab", "next field, previous field"),
     ("Arrow keys, Enter", "from count to count; Enter at the end of strata adds a row"),

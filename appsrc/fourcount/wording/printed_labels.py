@@ -97,6 +97,8 @@ PASTED_PARTS = {
     "span": "time span",
     "figures": "printed result",
 }
+ROW_PASTED = "Pasted: counts of row {number}."
 NO_TABLE_PASTED = "Nothing pasted: no table, no sentence with counts."
+COUNTS_NOT_UNDERSTOOD = "Nothing pasted: the numbers in this text were not understood. Type the counts."
 
 ROW_LINKS = {"add": "Add a row", "remove": "Remove row {number}"}

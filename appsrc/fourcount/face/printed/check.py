@@ -10,7 +10,7 @@ from PySide6.QtWidgets import QGridLayout, QLabel, QVBoxLayout
 
 from fourcount.face.fields import FieldsView
 from fourcount.face.header import Hairline
-from fourcount.face.links import Link
+from fourcount.face.links import WrappedLink
 from fourcount.face.look import Look
 from fourcount.face.printed.paper_says import PaperSays
 from fourcount.face.text import Words
@@ -49,7 +49,7 @@ class CheckView(FieldsView):
         self._check: CheckFindings | None = None
         self.paper = PaperSays(look)
         self.head = Words(look, "head", "muted", CHECK_HEAD, wraps=False)
-        self.adopt = Link(look, labels.COMMANDS["adopt"].replace("&", ""), adopt)
+        self.adopt = WrappedLink(look, labels.COMMANDS["adopt"].replace("&", ""), adopt)
         self.rows: list[Row] = []
         self._column = QVBoxLayout(self)
         self._column.setContentsMargins(0, 0, 0, 0)
@@ -85,6 +85,11 @@ class CheckView(FieldsView):
     def sentences(self) -> list[str]:
         """The findings on screen, in order."""
         return [row.words.text() for row in self.rows if not row.words.isHidden()]
+
+    @property
+    def answer(self) -> tuple[str, ...]:
+        """All that is said about what the paper prints, the offer to adopt its method included."""
+        return (*self.sentences, "" if self.adopt.isHidden() else self.adopt.text())
 
     def _show_findings(self, check: CheckFindings | None) -> None:
         told: list[tuple[str, str]] = []

@@ -73,6 +73,11 @@ class StrataRows(FieldsView):
         """Every field on screen, in reading order."""
         return (*self.heads.fields, *(field for row in self.rows for field in row.fields))
 
+    @property
+    def last_stop(self) -> QWidget:
+        """The last field that was made, on screen or not: rows to come are put right behind it."""
+        return self._rows[-1].fields[-1]
+
     def show_state(self, outcome: Outcome, findings: OutcomeFindings | None) -> None:
         """Show the strata as typed."""
         table = outcome.table
