@@ -2,16 +2,19 @@
 
 from __future__ import annotations
 
+import math
+
 import pytest
 
 from forms import CONFOUNDED, EVERY_FORM, at_time, effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
 from fourcount.record.paper import Choices
-from fourcount.stats.methods import PAIR_TESTS, RATE_TESTS, STRATA_TESTS
+from fourcount.stats.methods import FAMILIES, PAIR_FAMILIES, PAIR_TESTS, RATE_FAMILIES, RATE_TESTS, STRATA_TESTS
 from fourcount.wording.extras import extra_lines
 from fourcount.wording.form import measure_of
 from fourcount.wording.lines import measure_lines
 from fourcount.wording.working import working
+from fourcount.wording.working.letters import USED
 from fourcount.wording.working.parts import methods_of, table_measure
 
 
@@ -192,3 +195,75 @@ def test_the_pairs_that_differ_are_enough_for_every_test_of_pairs():
     """The p stands in the working whether or not the pairs that agree were typed."""
     alone, whole = paired("paired", ("", 20, 40, "")), paired("paired", (30, 20, 40, 110))
     assert rows_of("test", alone)["McNemar mid-P"] == rows_of("test", whole)["McNemar mid-P"]
+
+
+LETTERED = [
+    (of_total(), "risk_index", "x = 38, n = 412, p = 38/412 = 0.0922, z = 1.9600"),
+    (of_total(), "risk_difference", (
+        "p1 = 38/412 = 0.0922, p2 = 70/409 = 0.1711, n1 = 412, n2 = 409, N = 821, z = 1.9600"
+    )),
+    (paired("before-after", (14, 5, 2, 22)), "pair_difference", (
+        "e = 14, f = 5, g = 2, h = 22, p1 = 19/43 = 0.4419, l1 = 0.3043, u1 = 0.5889, p2 = 16/43 = 0.3721, "
+        "l2 = 0.2438, u2 = 0.5214, D = 0.0698, φ = 0.6230"
+    )),
+    (paired(counts=("", 20, 40, "")), "pair_odds_ratio", "f = 20, g = 40, alpha = 0.05"),
+    (person_time(), "rate_index", "x = 38, t = 4,120, z = 1.9600"),
+    (at_time(), "risk_difference", (
+        "D = −0.0790, p1 = 0.0920, l1 = 0.0680, u1 = 0.1240, p2 = 0.1710, l2 = 0.1380, u2 = 0.2110"
+    )),
+    (strata(), "pooled_risk_ratio", "R = 0.5474, V = 0.0350, z = 1.9600"),
+]  # fmt: skip
+
+
+@pytest.mark.parametrize(("outcome", "key", "letters"), LETTERED)
+def test_a_formula_s_letters_have_the_reader_s_numbers(outcome, key, letters):
+    """So that whoever doubts an interval can work it out on paper."""
+    rows = rows_of(key, outcome)
+    assert rows["With"] == letters
+    assert rows["Letters"]
+
+
+def numbers_of(rows):
+    """The letters with their numbers, as far as they are numbers."""
+    found = {}
+    for part in rows["With"].replace("−", "-").replace(",0", "0").split(", "):
+        name, *_between, number = part.split(" = ")
+        found[name] = float(number.replace(",", ""))
+    return found
+
+
+def test_the_numbers_of_the_letters_give_the_interval():
+    """Newcombe's formula of pairs, Sato's and Robins, Breslow and Greenland's worked out again from what is told."""
+    of = numbers_of(rows_of("pair_difference", paired("before-after", (14, 5, 2, 22))))
+    below, above = of["p1"] - of["l1"], of["u2"] - of["p2"]
+    low = of["D"] - math.sqrt(below**2 - 2 * of["φ"] * below * above + above**2)
+    assert low == pytest.approx(-0.055, abs=5e-4)
+    of = numbers_of(rows_of("pooled_risk_difference", strata()))
+    assert of["D"] - of["z"] * math.sqrt((of["D"] * of["ΣP"] + of["ΣQ"]) / of["W"] ** 2) == pytest.approx(
+        -0.123, abs=5e-4
+    )
+    of = numbers_of(rows_of("pooled_odds_ratio", strata()))
+    assert of["O"] * math.exp(of["z"] * math.sqrt(of["V"])) == pytest.approx(0.76, abs=5e-3)
+
+
+def test_every_method_that_a_family_shows_has_its_letters():
+    """In each form and family; a method added to a family needs them too."""
+    shown = {("risk", family.risk) for family in FAMILIES.values()} | {("risk", f.odds) for f in FAMILIES.values()}
+    for measure in ("risk_difference", "risk_ratio", "odds_ratio"):
+        shown |= {(measure, getattr(family, measure)) for family in FAMILIES.values()}
+    for measure in ("difference", "ratio", "odds_ratio"):
+        shown |= {(f"pair_{measure}", getattr(family, measure)) for family in PAIR_FAMILIES.values()}
+    for measure in ("rate", "difference", "ratio"):
+        name = measure if measure == "rate" else f"rate_{measure}"
+        shown |= {(name, getattr(family, measure)) for family in RATE_FAMILIES.values()}
+    assert shown <= set(USED)
+
+
+@pytest.mark.parametrize("family", ["score", "textbook", "exact"])
+@pytest.mark.parametrize("counts", [(0, 412, 70, 409), (38, 412, 0, 409), (0, 5, 5, 5), (5, 5, 5, 5)])
+def test_letters_of_tables_with_zeros_raise_nothing(counts, family):
+    """An infinite ratio stands as such, and where there is no interval there are no letters."""
+    for outcome in (of_total(counts), paired(counts=counts), person_time(counts)):
+        for line in measure_lines(outcome, appraise(outcome, Choices(family=family)), Choices(family=family)):
+            rows = rows_of(line.key, outcome, Choices(family=family))
+            assert "nan" not in rows.get("With", "")

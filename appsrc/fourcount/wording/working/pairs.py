@@ -37,7 +37,8 @@ def pair_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choices
     if measure == "pair_difference":
         rows += units(found)
     unit = "per 100" if measure == "pair_difference" else ""
-    rows += interval_rows(measure, found, choices.level, "pairs", unit=unit)
+    letters_of = _arguments(measure, pairs) if measure.startswith("pair_risk") else pairs
+    rows += interval_rows(measure, found, choices.level, "pairs", letters_of, unit=unit)
     rows += other_methods(measure, found, table_measure(measure), _arguments(measure, pairs), choices.level)
     return tuple(rows)
 
@@ -50,7 +51,7 @@ def _of_those_that_differ(
     if differ is None or not isinstance(found, Figure) or measure != "pair_odds_ratio":
         return ()
     pairs = PairCounts(both=0, index_only=differ[0], reference_only=differ[1], neither=0)
-    rows = [(ESTIMATE, quotient(*differ)), *interval_rows(measure, found, choices.level, "pairs")]
+    rows = [(ESTIMATE, quotient(*differ)), *interval_rows(measure, found, choices.level, "pairs", pairs)]
     return (*rows, *other_methods(measure, found, table_measure(measure), (pairs,), choices.level))
 
 

@@ -23,6 +23,7 @@ from fourcount.wording import limits, lines, numbers
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added_by
 from fourcount.wording.numbers import plain, quantity
+from fourcount.wording.working.letters import letter_rows
 
 Row = tuple[str, str]
 
@@ -30,6 +31,7 @@ SPACE: Row = ("", "")
 OTHER_METHODS = "By other methods:"
 CLUSTER = "cluster"  # reasons that withhold every interval and every p alike begin so
 ESTIMATE = "Estimate"
+FORMULA = "Formula"
 ALL_METHODS = (*METHODS, *PAIR_METHODS, *RATE_METHODS, *STRATA_METHODS, *TIMED_METHODS)
 METHOD_MEASURES = {
     "risk_index": "risk",
@@ -80,7 +82,7 @@ def entry_of(key: str, figure: Figure, form: Form) -> Method | None:
 
 def about(entry: Method | Test | HomogeneityEntry | Calculation) -> list[Row]:
     """A method in full."""
-    rows = [("Method", entry.title), ("Formula", entry.formula), ("Source", entry.source), ("Note", entry.note)]
+    rows = [("Method", entry.title), (FORMULA, entry.formula), ("Source", entry.source), ("Note", entry.note)]
     return [(label, text) for label, text in rows if text]
 
 
@@ -113,15 +115,32 @@ def interval_words(key: str, interval: limits.AnyInterval, figure: Figure, metho
 
 
 def interval_rows(
-    key: str, figure: Figure, level: float, form: Form, *, unit: str = "", how: str = "", per: int = 1
+    key: str,
+    figure: Figure,
+    level: float,
+    form: Form,
+    counts: object,
+    *,
+    unit: str = "",
+    how: str = "",
+    per: int = 1,
 ) -> list[Row]:
-    """The shown interval, and the method behind it in full."""
+    """The shown interval, and the method behind it in full, with the numbers of ``counts`` for its letters."""
     shown = interval_words(key, figure.interval, figure, figure.method, per)
     rows = [SPACE, (interval_label(level, unit), shown)]
     if how:
         rows.append(("How", how))
     entry = entry_of(key, figure, form)
-    return rows if entry is None else [*rows, *about(entry)]
+    if entry is None:
+        return rows
+    letters = letter_rows(entry.measure, figure, counts, level)
+    return [*rows, *after_formula(about(entry), letters)]
+
+
+def after_formula(rows: list[Row], letters: list[Row]) -> list[Row]:
+    """The rows about a method with its letters behind its formula."""
+    place = next((i + 1 for i, (label, _) in enumerate(rows) if label == FORMULA), len(rows))
+    return [*rows[:place], *letters, *rows[place:]]
 
 
 def interval_label(level: float, unit: str = "") -> str:

@@ -32,8 +32,9 @@ def rate_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choices
     unit = "" if measure == "rate_ratio" else f"per {unit_sum(per, outcome)}"
     if unit:
         rows.append((f"{unit[:1].upper()}{unit[1:]}", lines.estimate_text(measure, found, per)))
-    rows += interval_rows(measure, found, choices.level, "person-time", unit=unit, per=per)
     arguments = _arguments(measure, rates)
+    letters_of = rates if arguments == (rates,) else arguments
+    rows += interval_rows(measure, found, choices.level, "person-time", letters_of, unit=unit, per=per)
     return (*rows, *other_methods(measure, found, table_measure(measure), arguments, choices.level, per))
 
 

@@ -34,7 +34,7 @@ def timed_rows(measure: str, _outcome: Outcome, findings: OutcomeFindings, choic
         ratio = "" if isinstance(found.estimate, Gap) else f" = {plain(found.estimate)}"
         rows = [(ESTIMATE, f"{plain(index)} / {plain(reference)}{ratio}")]
     unit = "per 100" if measure == "risk_difference" else ""
-    return (*rows, *interval_rows(measure, found, level_of(findings, choices), "risk-at-time", unit=unit))
+    return (*rows, *interval_rows(measure, found, level_of(findings, choices), "risk-at-time", timed, unit=unit))
 
 
 def effect_rows(measure: str, _outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:

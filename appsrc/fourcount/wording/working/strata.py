@@ -51,7 +51,7 @@ def strata_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, choic
     parts = [(stratum.label, _parts(measure, stratum.counts)) for stratum in strata.strata]
     rows = [*parts, (ESTIMATE, _sums(measure, counts))]
     unit = "per 100" if measure == "pooled_risk_difference" else ""
-    rows += interval_rows(measure, found, choices.level, "strata", unit=unit)
+    rows += interval_rows(measure, found, choices.level, "strata", counts, unit=unit)
     rows += _interaction(measure, strata)
     return (*rows, *other_methods(measure, found, table_measure(measure), (counts,), choices.level))
 

@@ -55,11 +55,12 @@ def unpaired_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, cho
         return (*rows, *needed_rows(found, findings.measures["risk_difference"], findings, choices))
     unit = "per 100" if measure == "risk_difference" else ""
     how = BY_LIMITS.get(measure, "")
-    rows += interval_rows(measure, found, choices.level, findings.form, unit=unit, how=how)
+    behind = counts_behind(findings)
+    letters_of = None if behind is None else _lettered(measure, behind)
+    rows += interval_rows(measure, found, choices.level, findings.form, letters_of, unit=unit, how=how)
     rows += _divided(findings)
     if measure == "odds_ratio":
         rows += [*_conversion_rows(findings.conversion, names.risk_name(outcome)), _conditional_row(counts)]
-    behind = counts_behind(findings)
     if measure not in BY_LIMITS and behind is not None:
         arguments = _arguments(measure, behind)
         rows += other_methods(measure, found, METHOD_MEASURES[measure], arguments, choices.level)
@@ -156,6 +157,15 @@ def _arguments(measure: str, counts: FractionalCounts) -> tuple[object, ...]:
     if measure == "risk_reference":
         return counts.reference_events, counts.reference_total
     return (_turned(counts) if measure == "other_risk_ratio" else counts,)
+
+
+def _lettered(measure: str, counts: FractionalCounts) -> object:
+    """What the letters of the measure's formula stand for: one group's events and people, or both groups."""
+    if measure in ("risk_index", "odds_index"):
+        return counts.index_events, counts.index_total
+    if measure in ("risk_reference", "odds_reference"):
+        return counts.reference_events, counts.reference_total
+    return _arguments(measure, counts)[0]
 
 
 def _conversion_rows(conversion: Conversion | Gap, risk: str) -> list[Row]:
