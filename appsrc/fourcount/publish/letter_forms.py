@@ -11,6 +11,7 @@ from fourcount.appraisal.findings import (
     Rates,
     StrataFindings,
 )
+from fourcount.publish import groups
 from fourcount.publish.letter_figures import said_once
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
@@ -72,31 +73,23 @@ def rests_on(outcome: Outcome, findings: OutcomeFindings) -> str:
 
 def _groups(outcome: Outcome, counts: Counts) -> str:
     """``usual care 22 of 190, night lights 10 of 200.``"""
-    groups: tuple[tuple[names.Group, int, int], ...] = (
-        ("reference", counts.reference_events, counts.reference_total),
-        ("index", counts.index_events, counts.index_total),
-    )
     return (
         ", ".join(
             f"{names.label_within(outcome, group)} {numbers.whole(events)} of {numbers.whole(total)}"
-            for group, events, total in groups
+            for group, events, total in groups.people(counts)
         )
         + "."
     )
 
 
 def _rates(outcome: Outcome, rates: Rates) -> str:
-    groups: tuple[tuple[names.Group, int, float], ...] = (
-        ("reference", rates.reference_events, rates.reference_time),
-        ("index", rates.index_events, rates.index_time),
-    )
     return " ".join(
         exports.GROUP_RATE.format(
             group=names.sentence_case(names.label(outcome, group)),
             events=numbers.whole(events),
             time=time_in(time, outcome),
         )
-        for group, events, time in groups
+        for group, events, time in groups.person_time(rates)
     )
 
 

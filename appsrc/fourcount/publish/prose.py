@@ -6,6 +6,7 @@ from collections.abc import Iterable
 from datetime import date
 
 from fourcount.appraisal.findings import Gap, OutcomeFindings, PatientFindings
+from fourcount.publish import groups
 from fourcount.publish.letter_figures import figure_lines
 from fourcount.publish.letter_forms import beside_lines, form_lines, rests_on
 from fourcount.publish.made_with import made_with
@@ -47,20 +48,16 @@ def _counts(outcome: Outcome, findings: OutcomeFindings) -> str:
         return rests_on(outcome, findings)
     if isinstance(counts, Gap):
         return ""
-    groups: tuple[tuple[names.Group, int, int], ...] = (
-        ("reference", counts.reference_events, counts.reference_non_events),
-        ("index", counts.index_events, counts.index_non_events),
-    )
     event, other = names.event_words(outcome), names.other_words(outcome)
     return " ".join(
         exports.GROUP_COUNTS.format(
             group=names.sentence_case(names.label(outcome, group)),
             events=numbers.whole(events),
             event=event,
-            others=numbers.whole(others),
+            others=numbers.whole(total - events),
             other=other,
         )
-        for group, events, others in groups
+        for group, events, total in groups.people(counts)
     )
 
 

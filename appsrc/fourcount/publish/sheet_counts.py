@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import Counts, OutcomeFindings, PairCounts, PrintedFigure, Rates, StrataFindings
+from fourcount.publish import groups
 from fourcount.publish.sheet_rows import Row, number_cell, text_row
 from fourcount.record.outcome import Outcome
 from fourcount.wording import exports, names
@@ -28,12 +29,8 @@ def basis_rows(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
 
 def _counts(outcome: Outcome, counts: Counts, before: str = "") -> tuple[Row, ...]:
     """People with the event, and all people, of each group."""
-    groups: tuple[tuple[names.Group, int, int], ...] = (
-        ("reference", counts.reference_events, counts.reference_total),
-        ("index", counts.index_events, counts.index_total),
-    )
     table: list[Row] = []
-    for group, events, total in groups:
+    for group, events, total in groups.people(counts):
         where = names.in_group(outcome, group)
         with_event = exports.PEOPLE_WITH_EVENT.format(group=where, event=names.event_words(outcome))
         table.append((f"{before}{with_event}", str(events), "", "", ""))
@@ -42,12 +39,8 @@ def _counts(outcome: Outcome, counts: Counts, before: str = "") -> tuple[Row, ..
 
 
 def _rates(outcome: Outcome, rates: Rates) -> tuple[Row, ...]:
-    groups: tuple[tuple[names.Group, int, float], ...] = (
-        ("reference", rates.reference_events, rates.reference_time),
-        ("index", rates.index_events, rates.index_time),
-    )
     table: list[Row] = []
-    for group, events, time in groups:
+    for group, events, time in groups.person_time(rates):
         where = names.in_group(outcome, group)
         table.append((exports.EVENTS_IN_GROUP.format(group=where), str(events), "", "", ""))
         table.append((exports.TIME_IN_GROUP.format(group=where, unit=unit(outcome)), number_cell(time), "", "", ""))
