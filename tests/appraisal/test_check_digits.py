@@ -21,7 +21,8 @@ from printed_figures import number
         (Fraction(1504, 1000), "1.50", True),
         (Fraction(1505, 1000), "1.50", True),  # a tie, to the even digit
         (Fraction(1505, 1000), "1.51", True),  # the same tie, half up
-        (Fraction(1515, 1000), "1.51", False),  # half up and half to even both give 1.52
+        (Fraction(1515, 1000), "1.51", True),  # the nearest double lies below the half
+        (Fraction(3, 8), "0.37", False),  # a double itself: half up and half to even both give 0.38
         (Fraction(1515, 1000), "1.52", True),
         (Fraction(1506, 1000), "1.50", False),
         (Fraction(1506, 1000), "1.5", True),
@@ -37,17 +38,19 @@ from printed_figures import number
     ],
 )
 def test_digits_are_respected(value: Fraction | float, text: str, fits: bool) -> None:
-    """As many decimals as are printed, halves up or to the even digit, nothing else."""
+    """As many decimals as are printed, halves up, to the even digit or as doubles print, nothing else."""
     assert rounds_to(value, number(text)) is fits
 
 
 @given(st.integers(-(10**6), 10**6), st.integers(1, 10**4), st.integers(0, 3))
-def test_both_ways_of_rounding_count_and_no_third(above: int, below: int, decimals: int) -> None:
-    """Exactly what decimal arithmetic rounds half up or half to even, on either side of 0."""
+def test_the_ways_of_rounding_count_and_no_other(above: int, below: int, decimals: int) -> None:
+    """Exactly what decimal arithmetic rounds half up or half to even, or what the double at a half prints as."""
     value = Fraction(above, below)
     step = Decimal(1).scaleb(-decimals)
     exact = Decimal(above) / Decimal(below)
     ways = {exact.quantize(step, rounding) for rounding in (ROUND_HALF_UP, ROUND_HALF_EVEN)}
+    if (exact / step) % 1 in (Decimal("0.5"), Decimal("-0.5")):
+        ways.add(Decimal(f"{above / below:.{decimals}f}"))
     for neighbour in {way + step * away for way in ways for away in (-1, 0, 1)}:
         assert rounds_to(value, number(str(neighbour + 0))) is (neighbour in ways)
 
@@ -92,4 +95,6 @@ def test_a_float_on_a_tie_rounds_up_or_to_the_even_digit(text: str, fits: bool) 
     """3/8 to two decimals is 0.38 both ways; 0.37 leaves a digit off. An even digit below the tie is taken: 0.12."""
     assert rounds_to(0.375, number(text)) is fits
     assert rounds_to(0.125, number("0.12"))
+    assert rounds_to(Fraction(75, 1000), number("0.07"))  # the double nearest to 0.075 lies below it
+    assert rounds_to(Fraction(75, 1000), number("0.08"))
     assert rounds_to(0.125, number("0.13"))

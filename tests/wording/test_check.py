@@ -328,3 +328,13 @@ def test_numbers_that_nobody_would_count_the_noughts_of() -> None:
     (p,) = lines_beside(of_four(380, 30, 30, 390), "P < 0.001")
     assert p == "p < 0.001 follows from the counts by every test here (<0.0001)."
     assert lines_beside(of_four(38, 374, 70, 339), "risk difference 1%")[0].startswith("Check 1 point: ")
+
+
+def test_clusters_that_the_print_left_out_of_account() -> None:
+    """The limits that fit, and those that allow for the clusters, which differ where the estimates do not."""
+    (line,) = lines_beside(of_four(*FALLS), "RR 0.54 (0.37 to 0.78)", icc_text="0.02", cluster_size_text="25")
+    assert line == (
+        "Check the analysis: 0.54 (0.37 to 0.78) fits the risk ratio if the clusters are left out of account, 0.539 "
+        "(0.372 to 0.781) by Katz log, Koopman score and 1 other method at 95%; allowing for them, it is 0.539 (0.344 "
+        "to 0.841)."
+    )

@@ -166,6 +166,10 @@ class _Parts(dict[str, str]):
         if "own" not in self._facts:
             return ""
         value, measure = names.our_estimate(self._figure, self._facts, "own"), self._text_of("own_measure")
+        if "own_low" in self._facts:
+            value = f"{value} ({names.our_limits(self._figure, self._facts, 'own_')})"
+        if self._text_of("measure").startswith(names.UNCLUSTERED):
+            return texts.OWN_CLUSTERED.format(value=value)
         if not measure:
             return value
         same = measure == self._text_of("measure")

@@ -38,9 +38,10 @@ MEASURES = {
     "timed_difference": "risk difference",
     "timed_ratio": "risk ratio",
 }
+UNCLUSTERED = "unclustered_"
 ANALYSES = {
     "unpaired_": "{measure} of people taken as unpaired",
-    "unclustered_": "{measure} of people taken as if in no clusters",
+    UNCLUSTERED: "{measure} if the clusters are left out of account",
     "crude_": "crude {measure} of all strata thrown together",
 }
 SIDES = {

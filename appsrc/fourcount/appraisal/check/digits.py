@@ -1,14 +1,15 @@
 """Whether a number prints as the digits that a paper gives.
 
-"1.50" has two decimals, and only what rounds to it there reproduces it, halves up or to the even digit: both are in
-use. Estimates are fractions of whole numbers and are compared exactly. Limits are floats; a billionth of a unit of the
-last digit is allowed there, since an irrational limit lies on a tie by rounding alone. A printed infinity is met by an
-infinite limit of its sign alone.
+"1.50" has two decimals, and only what rounds to it there reproduces it: halves up, to the even digit, or as the nearest
+double happens to lie, since all three are in use. Estimates are fractions of whole numbers and are compared exactly.
+Limits are floats; a billionth of a unit of the last digit is allowed there, since an irrational limit lies on a tie by
+rounding alone. A printed infinity is met by an infinite limit of its sign alone.
 """
 
 from __future__ import annotations
 
 import math
+from decimal import ROUND_HALF_EVEN, Decimal
 from fractions import Fraction
 
 from fourcount.record.entry.readings import PrintedFigure, PrintedNumber, PrintedUnit
@@ -50,13 +51,21 @@ def rounds_to(value: Number, printed: PrintedNumber) -> bool:
     size = _in_units(value, printed)
     if size is None:
         return False
-    units = abs(last_digits(printed))
+    units, below = abs(last_digits(printed)), math.floor(size)
+    if _on_a_tie(size, below):
+        return units in {below + 1, below + below % 2, _as_a_double(value, printed.decimals)}
+    return units == math.floor(size + _HALF)
+
+
+def _on_a_tie(size: Number, below: int) -> bool:
     if isinstance(size, Fraction):
-        return units in {math.floor(size + _HALF), round(size)}
-    below = math.floor(size)
-    if abs(size - below - 0.5) <= _TIE * max(1.0, size):
-        return units in {below + 1, below + below % 2}
-    return units == math.floor(size + 0.5)
+        return size - below == _HALF
+    return abs(size - below - 0.5) <= _TIE * max(1.0, size)
+
+
+def _as_a_double(value: Number, decimals: int) -> int:
+    """The units that a program prints which holds a half as a double: 0.075 lies below it, and comes out as 0.07."""
+    return int(Decimal(abs(float(value))).scaleb(decimals).to_integral_value(ROUND_HALF_EVEN))
 
 
 def cut_to(value: Number, printed: PrintedNumber) -> bool:

@@ -95,7 +95,7 @@ def _whole(
 ) -> Iterator[Finding]:
     top, *rest = _groups(hits)
     first = top[0]
-    facts = {**_facts_of(top, shown), **_own(figure, first, candidates), "coarse": int(_coarse(figure))}
+    facts = {**_facts_of(top, shown), **_own(figure, first, candidates, shown), "coarse": int(_coarse(figure))}
     if figure.adjusted and first.at_level and first.place == 0:
         yield Finding(key="adjusted-is-crude", facts=facts)
         return
@@ -108,7 +108,8 @@ def _whole(
         printed: Facts = {} if figure.level is None else {"printed_level": figure.level}
         yield Finding(key="other-level", facts={**facts, **printed, "place": first.place})
     if first.place or not first.at_level:
-        whole = [group for group in rest if group[0].rank[0] <= 1]
+        most = first.rank[0] if _otherwise(first) else 1
+        whole = [group for group in rest if group[0].rank[0] <= most]
         for group in whole[:_MOST_OTHERS]:
             yield Finding(key="also-fits", facts=_facts_of(group))
 
@@ -124,7 +125,7 @@ def _estimate_alone(
     if miss is not None and first.place == 0:
         yield _missed(figure, first.candidate, miss)
         return
-    facts = {**_facts_of((first,), shown), **_own(figure, first, candidates), **_as_shown(figure, first, shown)}
+    facts = {**_facts_of((first,), shown), **_own(figure, first, candidates, shown), **_as_shown(figure, first, shown)}
     yield Finding(key="estimate-other-analysis" if _otherwise(first) else ESTIMATE[first.place], facts=facts)
 
 
@@ -249,10 +250,15 @@ def _otherwise(first: Hit) -> bool:
     return first.candidate.key.startswith(OTHER_ANALYSES)
 
 
-def _own(figure: PrintedFigure, first: Hit, candidates: tuple[Candidate, ...]) -> Facts:
-    """What the print's own measure is as read, beside a match that is something else."""
+def _own(figure: PrintedFigure, first: Hit, candidates: tuple[Candidate, ...], shown: Shown) -> Facts:
+    """What the print's own measure is as read, beside a match of another; its limits beside another analysis."""
     own = next((one for one in candidates if one.named and one.orientation == "as-read"), None)
     if first.place == 0 or own is None:
         return {}
-    value = hit(figure, own, None, wanted_level(figure), "estimate").match.computed[0]
-    return {} if value is None else {"own_measure": own.key, "own": value}
+    level = first.match.level
+    way = (shown.way(own, level) or next(iter(own.ways), None)) if _otherwise(first) and has_limits(figure) else None
+    value, low, high = hit(figure, own, way, level, "estimate").match.computed
+    if value is None:
+        return {}
+    facts: Facts = {"own_measure": own.key, "own": value}
+    return facts if low is None or high is None else {**facts, "own_low": low, "own_high": high}
