@@ -16,6 +16,7 @@ from fourcount.record.entry.pasted.columns import (
 from fourcount.record.entry.pasted.effects import effects_alone, only_name
 from fourcount.record.entry.pasted.grid import read_grid
 from fourcount.record.entry.pasted.groups import two_groups
+from fourcount.record.entry.pasted.heading_sets import negated
 from fourcount.record.entry.pasted.headings import SEXES, heading_words, is_sum, is_time
 from fourcount.record.entry.pasted.matrix import Matrix, matrix_of
 from fourcount.record.entry.pasted.pair_table import pair_table
@@ -87,9 +88,19 @@ def _understood(matrix: Matrix, text: str) -> Pasted | None:
         down and across and differ and (down.score == across.score or (summed and best.form == "events-and-others"))
     )
     sexes = best.form == "events-and-others" and all(set(heading_words(head.label)) & SEXES for head in matrix.heads)
-    undecided = undecided or sexes
+    shared = any(each.percent for each in best.quantities)
+    nameless = best.form == "events-and-others" and not shared and _nameless(matrix, best.doubts)
+    undecided = undecided or sexes or nameless
     doubts = (*best.doubts, *(("orientation",) if undecided else ()))
     return _table(best, doubts, layout)
+
+
+def _nameless(matrix: Matrix, doubts: Sequence[str]) -> bool:
+    """Whether only one side is named, and that by a thing and its absence, or no side but a sum was found."""
+    sides = (matrix.heads, matrix.labels), (matrix.labels, matrix.heads)
+    alone = any(negated(one) and not any(head.label for head in other) for one, other in sides)
+    bare = not any(head.label for head in (*matrix.heads, *matrix.labels))
+    return alone or (bare and "total-left-out" in doubts)
 
 
 def _without_sums(matrix: Matrix) -> Matrix:

@@ -233,7 +233,8 @@ class SentenceReader:
         around = {token.lower for token in self.tokens[bounds[0] : bounds[1]]}
         effect = any(figure.measure in _EFFECTS for figure in self.figures)
         if _of_own_totals(first) and _of_own_totals(second):
-            return all(labels) or "respectively" in around
+            nested = first.events and second.total and first.events.whole == second.total.whole
+            return not nested and (all(labels) or "respectively" in around)
         if COMPARATORS & between or _GROUP_WORDS & around or effect or (self.figures and all(labels)):
             return True
         if strictly or not all(labels):

@@ -53,7 +53,7 @@ def _other_forms(pasted: Pasted) -> tuple[Pasted, ...]:
 
 
 def _in_form(pasted: Pasted, form: Form) -> Pasted | None:
-    """The same counts in another form; where their totals stand first, they change places. None where neither can be."""
+    """The same counts in another form; totals that stand first change places. None where neither can be."""
     straight = replace(pasted, form=form)
     if _possible(straight):
         return straight

@@ -234,9 +234,6 @@ def _cell_at(printed: Print, phrases: Phrases, place: int) -> tuple[Cell | None,
         return _p(printed, place)
     if token.kind != "number":
         return None, place + 1
-    if phrases.at(place + 1).text == "\u00b1" and phrases.at(place + 2).kind == "number":
-        text = printed.piece(place, place + 3)
-        return Cell(text=text, result=text), place + 3
     result = _result(printed, phrases, place)
     if result:
         return result
@@ -295,6 +292,9 @@ def _result(printed: Print, phrases: Phrases, place: int) -> tuple[Cell, int] | 
         text = printed.piece(place, place + 3)
         return Cell(text=text, result=text, limits=True), place + 3
     limits = opened and low.kind == high.kind == "number" and between.lower in ("to", "-", ",", ";")
+    if phrases.at(place + 1).text == "\u00b1" and phrases.at(place + 2).kind == "number":
+        text = printed.piece(place, place + 3)
+        return Cell(text=text, result=text), place + 3
     risk = 0 <= low.value <= token.value <= high.value <= 100
     if not limits or (token.whole is not None and not (low.decimals or high.decimals or risk)):
         return None

@@ -53,6 +53,7 @@ _RESULT = frozenset(
 _EXPOSURES = frozenset(
     words("exposed unexposed non-exposed nonexposed vaccinated unvaccinated untreated smokers non-smokers nonsmokers")
 )
+_OTHER_P = frozenset(words("interaction trend heterogeneity"))
 SEXES = frozenset(words("men women man woman boys girls boy girl males females male female"))
 """Words that name groups or strata as well as whom was counted."""
 _SUMS = frozenset(words("total totals all overall both sum combined"))
@@ -73,6 +74,8 @@ def role_of(text: str) -> Role:
 
 
 def _is_p(_: list[str], said: set[str]) -> bool:
+    if "p" in said and said & _OTHER_P:
+        return True
     return ("p" in said and said <= {"p", "value", "values", "for"}) or "p-value" in said
 
 

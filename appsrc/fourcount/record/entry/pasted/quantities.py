@@ -142,6 +142,8 @@ class Phrases:
         word = self.at(place).lower
         if word == "out":
             place, word = place + 1, self.at(place + 1).lower
+        if word == "of" and self.at(place + 1).kind == "word" and self.at(place + 2).lower == "among":
+            place, word = place + 2, "among"
         if word not in ("of", "among", "in", "from", "amongst", "per"):
             return 0
         place += 1
@@ -227,7 +229,10 @@ class Phrases:
             percent, after = self._percent(self._nouns(place + 2, 2), events, None)
         if percent is None:
             return Quantity(first=place, after=place + 1, events=events) if self.bare else None
-        return Quantity(first=place, after=after, events=events, percent=percent)
+        within = self.tokens[place:after]
+        named = [two for one, two in zip(within, within[2:], strict=False) if one.lower == "n" and two.whole]
+        total = named[0] if named and (events.whole or 0) <= (named[0].whole or 0) else None
+        return Quantity(first=place, after=after, events=events, percent=percent, total=total)
 
     def _from_percent(self, place: int) -> Quantity:
         """``9.2% (38/412)``, ``9.2% of 412``, ``9% (95% CI 6 to 12)``, or a percentage alone."""

@@ -8,6 +8,7 @@ from fourcount.record.entry.pasted.cells import Cell
 from fourcount.record.entry.pasted.headings import Role
 
 _INTERVAL = re.compile(r"[(\[,; ]*([0-9.]+ ?% ?-?(?:CI|CrI|confidence interval)s?)[)\] ]*", re.IGNORECASE)
+_OTHER_P = re.compile("interaction|trend|heterogeneity", re.IGNORECASE)
 _BRACKET = re.compile(r"[(\[]")
 
 
@@ -27,6 +28,8 @@ def named_result(head: str, role: Role, cell: Cell) -> str:
 
 def add_result(texts: list[str], head: str, role: Role, cell: Cell) -> None:
     """Put a result to the others; limits that stand in a column or a line of their own belong to the one before."""
+    if _OTHER_P.search(head):
+        return
     if not cell.limits:
         texts.append(named_result(head, role, cell))
     elif texts and not texts[-1].endswith(")") and not texts[-1].startswith(("P ", "p ")):
