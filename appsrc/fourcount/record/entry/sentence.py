@@ -12,8 +12,9 @@ from fourcount.record.entry.pasted.doubts import PASTE_DOUBTS
 from fourcount.record.entry.pasted.event_words import event_words, time_span
 from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
 from fourcount.record.entry.pasted.pair_words import pair_sentence
-from fourcount.record.entry.pasted.proportions import beside, gives
+from fourcount.record.entry.pasted.proportions import gives
 from fourcount.record.entry.pasted.quantities import OPENING, Phrases, Quantity
+from fourcount.record.entry.pasted.told_groups import agrees, form_of, of_own_total, pasted_group
 from fourcount.record.entry.pasted.totals import leads_clause, shared_total, with_totals, without_sums
 from fourcount.record.entry.pasted.vocabulary import (
     COMPARATORS,
@@ -25,9 +26,8 @@ from fourcount.record.entry.pasted.vocabulary import (
     PEOPLE,
 )
 from fourcount.record.entry.printed import named_figures
-from fourcount.record.entry.readings import Pasted, PastedGroup
-from fourcount.record.entry.tokens import LONGEST_TEXT, Print, Token, as_sentence, take_apart
-from fourcount.record.outcome import Form
+from fourcount.record.entry.readings import Pasted
+from fourcount.record.entry.tokens import LONGEST_TEXT, Print, as_sentence, take_apart
 
 __all__ = ["PASTE_DOUBTS", "read_sentence"]
 
@@ -141,7 +141,7 @@ class SentenceReader:
                 following = self.tokens[place + 1].lower
                 counts = token.whole is not None and not token.percent and place not in self.busy
                 whole = msgspec.structs.replace(quantity, first=place, events=token)
-                if counts and following in PEOPLE | {"in", "with", "on"} and _agrees(whole):
+                if counts and following in PEOPLE | {"in", "with", "on"} and agrees(whole):
                     return whole
                 break
         return quantity
@@ -152,7 +152,7 @@ class SentenceReader:
         if not alone or not (quantity.events and quantity.total) or quantity.first - ahead.after > _NEAR:
             return False
         whole = msgspec.structs.replace(quantity, percent=ahead.percent)
-        return self.tokens[quantity.first - 1].text in OPENING and _agrees(whole)
+        return self.tokens[quantity.first - 1].text in OPENING and agrees(whole)
 
     def _pairs(self, quantities: Sequence[Quantity], *, bare: bool) -> Iterator[tuple[Quantity, Quantity]]:
         """Neighbours of one kind, complete ones first; not more of them than a reader would look at."""
@@ -232,14 +232,14 @@ class SentenceReader:
         between = {token.lower for token in self.tokens[first.after : second.first]}
         around = {token.lower for token in self.tokens[bounds[0] : bounds[1]]}
         effect = any(figure.measure in _EFFECTS for figure in self.figures)
-        if _of_own_totals(first) and _of_own_totals(second):
+        if of_own_total(first) and of_own_total(second):
             nested = first.events and second.total and first.events.whole == second.total.whole
             return not nested and (all(labels) or "respectively" in around)
         if COMPARATORS & between or _GROUP_WORDS & around or effect or (self.figures and all(labels)):
             return True
         if strictly or not all(labels):
             return False
-        told = all(each.percent is not None and _agrees(each) for each in (first, second))
+        told = all(each.percent is not None and agrees(each) for each in (first, second))
         behind = {token.lower for token in self.tokens[second.after : bounds[1]]}
         ahead = {token.lower for token in self.tokens[bounds[0] : first.first]}
         noun = self.tokens[first.after]
@@ -254,9 +254,9 @@ class SentenceReader:
         doubts: list[str],
         quantities: Sequence[Quantity],
     ) -> Pasted:
-        form = _form(pair)
+        form = form_of(pair)
         words = event_words(self.printed, pair[0], pair[1], *bounds)
-        if any(each.percent and each.events and each.total and not _agrees(each) for each in pair):
+        if any(each.percent and each.events and each.total and not agrees(each) for each in pair):
             doubts.append("percent-disagrees")
         others = [
             each
@@ -269,7 +269,7 @@ class SentenceReader:
             doubts.append("changed-count")
         return Pasted(
             form=form,
-            groups=tuple(_group(form, quantity, label) for quantity, label in zip(pair, labels, strict=True)),
+            groups=tuple(pasted_group(form, quantity, label) for quantity, label in zip(pair, labels, strict=True)),
             words="" if words.casefold() in (label.casefold() for label in labels) else words,
             unit=pair[0].unit or pair[1].unit,
             limits_level=pair[0].level_text or pair[1].level_text,
@@ -311,40 +311,3 @@ class SentenceReader:
         ):
             pieces = [self.printed.piece(self.spans[0][0], self.spans[-1][1])]
         return " ".join("; ".join(pieces).split())
-
-
-def _form(pair: Sequence[Quantity]) -> Form:
-    if pair[0].time is not None:
-        return "person-time"
-    if pair[0].events is not None:
-        return "events-of-total"
-    return "risk-at-time" if pair[0].low is not None else "percent-of-total"
-
-
-def _of_own_totals(quantity: Quantity) -> bool:
-    """Whether a count follows its own total, "Of 412 patients with lamps, 38 ..."."""
-    events, total = quantity.events, quantity.total
-    return events is not None and total is not None and total.end < events.start and quantity.percent is None
-
-
-def _agrees(quantity: Quantity) -> bool:
-    events, total = quantity.events, quantity.total
-    if quantity.percent is None or events is None or total is None:
-        return True
-    return gives(quantity.percent, events.whole or 0, total.whole or 0)
-
-
-def _group(form: Form, quantity: Quantity, label: str) -> PastedGroup:
-    """A group's two cells; a percentage stays beside its count only where the count does not give it."""
-    part = quantity.events or quantity.percent
-    left = part.text if part else ""
-    if form in ("percent-of-total", "risk-at-time"):
-        left += "%"
-    elif quantity.percent is not None and not _agrees(quantity):
-        left = beside(left, quantity.percent)
-    if form == "risk-at-time" and quantity.low and quantity.high:
-        right = f"{quantity.low.text} to {quantity.high.text}%"
-    else:
-        whole: Token | None = quantity.time or quantity.total
-        right = whole.text if whole else ""
-    return PastedGroup(left_text=left, right_text=right, label=label)
