@@ -179,6 +179,14 @@ class _Parts(dict[str, str]):
             else texts.OWN.format(name=names.measure_name(measure), value=value)
         )
 
+    def _what(self) -> str:
+        """What there is to check where only another level fits: by the place of the match, also its name or side."""
+        place = self._facts.get("place")
+        return texts.AT_ANOTHER_LEVEL.get(place if isinstance(place, int) else 0, texts.ALL_OF_THEM)
+
+    def _called(self) -> str:
+        return texts.CALLED.format(says=self._says()) if self._facts.get("place") in (1, 3) else ""
+
     def _not_level(self) -> str:
         level = self._facts.get("printed_level")
         return texts.NO_LEVEL if level is None else texts.NOT_LEVEL.format(level=_level(level))

@@ -10,7 +10,7 @@ TEXTS = {
     "other-way-round": "Check which way round: {printed} fits the {name} {side}, {ours}{by}{own}.{chance}",
     "other-name-and-way": "Check the name and which way round: {printed}, printed as {says}, fits the {name} {side}, "
     "{ours}{by}{own}.{chance}",
-    "other-level": "Check the level: {printed} fits the {name}{sided} at {level}, {ours}, by {methods}{not_level}."
+    "other-level": "Check {what}: {printed}{called} fits the {name}{sided} at {level}, {ours}, by {methods}{not_level}."
     "{chance}",
     "other-analysis": "Check the analysis: {printed} fits the {name}{sided}, {ours}{by}{own}.{chance}",
     "also-fits": "It also fits the {name}{sided}, {ours}{by}.",
@@ -51,7 +51,7 @@ TEXTS = {
 }
 """One sentence for every finding but those about p."""
 
-NOTES = ("adjusted", "no-hazard-ratio", "p-unchecked", "p-zero")
+NOTES = ("adjusted", "no-hazard-ratio", "symmetric", "p-unchecked", "p-zero")
 """Findings that neither confirm the print nor ask to check it."""
 
 BY_SHOWN = " by the method shown, {first},{rest} at {level}"
@@ -68,6 +68,9 @@ FITS_AS_WELL = ", but {printed} fits the {name} as well: {ours}{by}"
 OWN = ", while the {name} is {value}"
 OWN_CLUSTERED = "; allowing for them, it is {value}"
 OWN_AS_ENTERED = ", while as entered it is {value}"
+AT_ANOTHER_LEVEL = {0: "the level", 1: "the name and the level", 2: "which way round, and the level"}
+ALL_OF_THEM = "the name, which way round, and the level"
+CALLED = ", printed as {says},"
 NOT_LEVEL = ", while the paper says {level}"
 NO_LEVEL = ", and the paper names no level"
 SLIP = "; two of its digits may have changed places"
