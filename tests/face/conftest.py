@@ -85,7 +85,7 @@ class Hands:
         if form == "effect-only":
             self.type("OR 0.49 (0.32 to 0.75)")
         elif form == "strata":
-            for text in ("38", "412", "70", "409", "old", "10", "100", "20", "100"):
+            for text in ("38", "412", "70", "409", "10", "100", "20", "100"):
                 self.type(text)
                 self.press("Return")
         else:

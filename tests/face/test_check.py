@@ -145,6 +145,24 @@ def test_adopting_is_a_command_where_there_is_something_to_adopt(example: Hands)
     assert example.window.session.record.choices.level == 0.9
 
 
+def test_going_to_the_line_again_leaves_the_answer(example: Hands) -> None:
+    """The key that goes to what the paper says changes nothing that was found."""
+    sentences = says(example, "0.54 (0.37 to 0.78)")
+    example.press("Tab")
+    example.do("paper")
+    assert check_of(example).sentences == sentences
+
+
+def test_adopting_right_after_a_key_rests_on_what_is_typed_now(example: Hands) -> None:
+    """No check of counts that are gone is adopted."""
+    says(example, "0.54 (0.39 to 0.73)")
+    example.do("first-cell")
+    example.press("End")
+    example.type("9")
+    example.do("adopt")
+    assert example.window.session.record.choices.level == 0.95
+
+
 def test_undo_reaches_what_the_paper_says(example: Hands) -> None:
     """Typing there is one step, and its field gets the cursor back."""
     says(example, "0.54 (0.37 to 0.78)")

@@ -48,14 +48,18 @@ def test_rows_are_typed_with_tab_in_reading_order(strata: Hands) -> None:
 
 
 def test_enter_goes_through_the_rows_and_adds_one_at_the_end(hands: Hands) -> None:
-    """Enter in the last cell of the last row makes a new one, with the cursor in its label."""
+    """Enter goes from count to count, and past the last one makes a new row, with the cursor in its first count."""
     hands.do("form-strata")
     hands.click(rows_of(hands).rows[0].label)
-    for row in (*TWO_ROWS, ("unknown", "1", "9", "2", "8")):
+    hands.type("under 65")
+    hands.press("Return")
+    for row in (TWO_ROWS[0][1:], TWO_ROWS[1][1:], ("1", "9", "2", "8")):
         for text in row:
             hands.type(text)
             hands.press("Return")
-    assert texts(hands) == [*TWO_ROWS, ("unknown", "1", "9", "2", "8"), ("", "", "", "", "")]
+    assert texts(hands) == [TWO_ROWS[0], ("", *TWO_ROWS[1][1:]), ("", "1", "9", "2", "8"), ("", "", "", "", "")]
+    assert hands.field == "strata.3.first_left_text"
+    hands.press("Shift+Tab")
     assert hands.field == "strata.3.label_text"
     hands.do("undo")
     assert len(texts(hands)) == 3

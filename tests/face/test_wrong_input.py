@@ -128,3 +128,17 @@ def test_a_very_long_text_is_kept_and_named_in_short(hands: Hands) -> None:
     assert hands.texts[0] == "word " * 60
     assert len(hands.notes) == 1
     assert len(hands.notes[0]) < 120
+
+
+def test_what_is_typed_is_text_in_tips_too(hands: Hands) -> None:
+    """A tip over a marked cell or a long title shows signs as they are, and never at any length."""
+    cell = hands.window.printed.grid.cells["first_left_text"]
+    hands.write(cell, "<h1>x</h1><img src='a'>")
+    assert "<h1>" not in cell.toolTip()
+    assert "&lt;h1&gt;" in cell.toolTip()
+    hands.write(hands.window.header.title, "<b>long</b> " * 1_000)
+    hands.click(cell)
+    hands.window.grab()
+    tip = hands.window.header.title.toolTip()
+    assert "<b>" not in tip
+    assert 0 < len(tip) < 1_000

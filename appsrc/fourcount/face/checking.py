@@ -32,6 +32,7 @@ class Checking(QObject):
         self._session = session
         self._later = later
         self._asked: tuple[Outcome, Choices] | None = None
+        self._answered: tuple[Outcome, Choices] | None = None
         self.found: CheckFindings | None = None
         self._timer = QTimer(self)
         self._timer.setSingleShot(True)
@@ -54,11 +55,22 @@ class Checking(QObject):
         else:
             self._timer.start()
 
+    def settle(self) -> CheckFindings | None:
+        """What the check of the record as it stands now finds; made at once where it was still to come."""
+        from fourcount.appraisal.check import check
+
+        now = (self._session.outcome, self._session.record.choices)
+        if self._answered != now:
+            self._timer.stop()
+            self._on_checked(*now, check(*now))
+        return self.found
+
     def _on_pause(self) -> None:
         if self._asked:
             self._later.ask_check(*self._asked)
 
     def _on_checked(self, outcome: Outcome, choices: Choices, found: CheckFindings) -> None:
         if (outcome, choices) == (self._session.outcome, self._session.record.choices):
+            self._answered = (outcome, choices)
             self.found = found
             self.changed.emit()

@@ -222,9 +222,10 @@ class Commands(QObject):
         from fourcount.wording.pasted import filled
 
         before = self._session.outcome
+        another = editing.brings_another_table(before, pasted)
         self._session.change_outcome(editing.take_paste(before, pasted))
         self.pasted.emit()
-        self.told.emit(filled(before, self._session.outcome))
+        self.told.emit(filled(before, self._session.outcome, another=another))
 
     def _offer_or_take(self, pasted: Pasted) -> None:
         from fourcount.record.entry.turning import in_chosen_form

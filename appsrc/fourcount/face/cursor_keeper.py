@@ -9,6 +9,7 @@ from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QWidget
 
 from fourcount.face.fields import ChoiceField, TextField
+from fourcount.record.outcome import CELLS
 
 if TYPE_CHECKING:
     from fourcount.face.window import MainWindow
@@ -61,6 +62,11 @@ class CursorKeeper(QObject):
         """One more row of strata, with the cursor in it."""
         self._window.commands.add_row()
         self._window.printed.rare.go_to_last_row()
+
+    def add_row_by_enter(self) -> None:
+        """One more row of strata, with the cursor in its first count, as Enter goes from count to count."""
+        self._window.commands.add_row()
+        self._window.printed.rare.go_to_last_row(CELLS[0])
 
     def remove_row(self) -> None:
         """Take out the row of strata in which the cursor is."""

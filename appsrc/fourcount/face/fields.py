@@ -20,6 +20,7 @@ from PySide6.QtGui import (
 from PySide6.QtWidgets import QComboBox, QLineEdit, QMenu, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
+from fourcount.face.text import tip
 from fourcount.ink.style import Role
 
 LONGEST_TEXT = 10_000_000
@@ -82,7 +83,7 @@ class TextField(QLineEdit):
             self.update()
         if reason != self.accessibleDescription():
             self.setAccessibleDescription(reason)
-            self.setToolTip(reason)
+            self.setToolTip(tip(reason))
 
     def sizeHint(self) -> QSize:
         return QSize(self._look.px(80), self._look.px(30))
@@ -188,9 +189,9 @@ class QuietField(TextField):
         painter.setFont(self.font())
         painter.setPen(self._look.colour("ink"))
         words = self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, self.width())
-        tip = self.text() if words != self.text() else ""
-        if tip != self.toolTip():
-            self.setToolTip(tip)
+        whole = tip(self.text()) if words != self.text() else ""
+        if whole != self.toolTip():
+            self.setToolTip(whole)
         painter.drawText(self.rect(), self.alignment() | Qt.AlignmentFlag.AlignVCenter, words)
         if self.underMouse():
             draw_underline(self, painter, self._look)

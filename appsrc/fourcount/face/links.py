@@ -7,6 +7,7 @@ from PySide6.QtGui import QAction, QKeyEvent, QPainter, QPaintEvent, QPen
 from PySide6.QtWidgets import QAbstractButton, QSizePolicy
 
 from fourcount.face.look import Look
+from fourcount.face.text import tip
 
 
 class Link(QAbstractButton):
@@ -24,7 +25,7 @@ class Link(QAbstractButton):
         if action:
             self.clicked.connect(action.trigger)
             self._shortcut = action.shortcut().toString(action.shortcut().SequenceFormat.NativeText)
-            self.setToolTip(f"{name or words}  {self._shortcut}".strip())
+            self.setToolTip(tip(f"{name or words}  {self._shortcut}".strip()))
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 
@@ -33,7 +34,7 @@ class Link(QAbstractButton):
         if words != self.text():
             self.setText(words)
             self.setAccessibleName(words)
-            self.setToolTip(f"{words}  {self._shortcut}".strip())
+            self.setToolTip(tip(f"{words}  {self._shortcut}".strip()))
             self.updateGeometry()
 
     def minimumSizeHint(self) -> QSize:

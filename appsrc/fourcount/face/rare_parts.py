@@ -171,7 +171,7 @@ class RareParts(FieldsView):
     def paper_field(self, outcome: Outcome, choices: Choices, width: int) -> TextField:
         """The field of what the paper says; once asked for, it stays."""
         self._asked_for = True
-        self.show_check(outcome, None, choices, width)
+        self.show_check(outcome, self.check.found if self.check else None, choices, width)
         return (self.check or self._make_check()).paper.text
 
     @property
@@ -184,10 +184,10 @@ class RareParts(FieldsView):
         if self.strata and not self.strata.isHidden():
             self.strata.go_to(self.strata.current)
 
-    def go_to_last_row(self) -> None:
+    def go_to_last_row(self, name: str = "label_text") -> None:
         """Bring the cursor into the newest row."""
         if self.strata and not self.strata.isHidden():
-            self.strata.go_to(len(self.strata.rows) - 1)
+            self.strata.go_to(len(self.strata.rows) - 1, name)
 
     def leave_paste(self) -> bool:
         """Put an offered paste away; whether there was one."""

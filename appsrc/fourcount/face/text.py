@@ -2,11 +2,22 @@
 
 from __future__ import annotations
 
+from html import escape
+
 from PySide6.QtCore import QSize, Qt
 from PySide6.QtWidgets import QLabel, QSizePolicy
 
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
+
+LONGEST_TIP = 200
+"""Characters of a tip; what is typed can be as long as one likes."""
+
+
+def tip(text: str) -> str:
+    """A text for a tool tip, which Qt would otherwise lay out as a page, with its pictures, where it looks like one."""
+    short = text if len(text) <= LONGEST_TIP else f"{text[:LONGEST_TIP]}…"
+    return f"<qt>{escape(short)}</qt>" if "<" in short or "&" in short else short
 
 
 class Words(QLabel):

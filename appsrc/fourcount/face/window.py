@@ -134,7 +134,7 @@ class MainWindow(QMainWindow):
         self.printed.form.chosen.connect(do.choose_form)
         self.printed.take_table = do.take_table
         self.printed.chosen.connect(do.choose)
-        self.printed.row_wanted.connect(go.add_row)
+        self.printed.row_wanted.connect(go.add_row_by_enter)
         self.printed.paste_taken.connect(do.take_paste)
         self.printed.paste_left.connect(go.paste_over)
         do.paste_offered.connect(go.paste_offered)
@@ -288,7 +288,7 @@ class MainWindow(QMainWindow):
             self.session.take_findings(outcome, findings)
 
     def _on_adopt(self) -> None:
-        self.commands.adopt(self.checking.found if self.checking else None)
+        self.commands.adopt(self.checking.settle() if self.checking else None)
 
     def _on_told(self, notice: str) -> None:
         self.printed.tell(notice)

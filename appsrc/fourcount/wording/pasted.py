@@ -5,7 +5,7 @@ from __future__ import annotations
 from fourcount.record.entry.readings import Pasted, PastedGroup
 from fourcount.record.outcome import Form, Outcome
 from fourcount.wording import labels
-from fourcount.wording.printed_labels import PASTED, PASTED_PARTS
+from fourcount.wording.printed_labels import PASTED, PASTED_PARTS, PUT_AWAY
 
 GROUP_LINES: dict[Form, str] = {
     "events-and-others": "{label}: {left} with, {right} without",
@@ -58,8 +58,8 @@ def uncertain(pasted: Pasted) -> list[str]:
     return [DOUBTS.get(key, UNKNOWN_DOUBT) for key in pasted.ambiguous]
 
 
-def filled(before: Outcome, after: Outcome) -> str:
-    """What a paste changed, in a short notice."""
+def filled(before: Outcome, after: Outcome, *, another: bool = False) -> str:
+    """What a paste changed, in a short notice; ``another`` where it came over an earlier table and its words."""
     kinds = {
         "table": ("table",),
         "labels": ("first_label_text", "second_label_text"),
@@ -73,7 +73,8 @@ def filled(before: Outcome, after: Outcome) -> str:
         for part, fields in kinds.items()
         if any(getattr(before, field) != getattr(after, field) for field in fields)
     ]
-    return PASTED.format(parts=", ".join(parts)) if parts else labels.NOTHING_PASTED
+    told = PASTED.format(parts=", ".join(parts)) if parts else labels.NOTHING_PASTED
+    return f"{told} {PUT_AWAY}" if another else told
 
 
 def _pairs(pasted: Pasted) -> list[str]:

@@ -49,6 +49,7 @@ OPTIONAL = {
 }
 """The links that open fields which few need."""
 
+OPENED = "open below"
 CLOSE_FIELDS = "Close {name}"
 COUNTING = {"people": "people", "events": "events, several a person"}
 FOLLOW_UP = {False: "as long for everybody", True: "varied between people"}
@@ -67,7 +68,10 @@ OPTIONAL_FIELDS = {
     "losses": "Lost",
     "randomised_text": "randomised",
     "lost_text": "lost",
-    "loss_ratio_text": "their risk, times",
+    "loss_ratio_text": "Risk of those lost, times that of those seen",
+    "icc_text_short": "correlation",
+    "cluster_size_text_short": "mean size",
+    "adjusted_for_text_short": "for",
     "icc_text": "Intracluster correlation",
     "cluster_size_text": "Mean size of a cluster",
     "clusters": "Clusters",
@@ -77,10 +81,10 @@ OPTIONAL_FIELDS = {
     "adjusted_for_text": "What it is adjusted for",
 }
 OPTIONAL_HINTS = {
-    "icc_text": "ICC “0.02”",
-    "cluster_size_text": "size “25”",
+    "icc_text": "“0.02”",
+    "cluster_size_text": "“25”",
     "adjusted_text": "“0.58 (0.39–0.85)”",
-    "adjusted_for_text": "for “age, sex”",
+    "adjusted_for_text": "“age, sex”",
     "randomised_text": "",
     "lost_text": "",
     "loss_ratio_text": "1",
@@ -89,6 +93,7 @@ OPTIONAL_HINTS = {
 PASTE_HEAD = "Understood from what was pasted"
 PASTE_LINKS = {"take": "Take it", "turn": "Other way round", "leave": "Leave it"}
 PASTED = "Pasted: {parts}."
+PUT_AWAY = "The earlier table’s words and results were put away; undo brings them back."
 PASTED_PARTS = {
     "table": "table",
     "labels": "groups",

@@ -46,7 +46,7 @@ class CheckView(FieldsView):
     def __init__(self, look: Look, adopt: QAction) -> None:
         super().__init__()
         self._look = look
-        self._check: CheckFindings | None = None
+        self.found: CheckFindings | None = None
         self.paper = PaperSays(look)
         self.head = Words(look, "head", "muted", CHECK_HEAD, wraps=False)
         self.adopt = WrappedLink(look, labels.COMMANDS["adopt"].replace("&", ""), adopt)
@@ -72,8 +72,8 @@ class CheckView(FieldsView):
         alone = isinstance(outcome.table, EffectOnly)
         self.paper.align(field_width)
         self.paper.show_state(outcome, alone)
-        if check is not self._check:
-            self._check = check
+        if check is not self.found:
+            self.found = check
             self._show_findings(check)
         self._show_adopt(check, choices)
 

@@ -79,7 +79,8 @@ class OptionalFields(FieldsView):
                 self._row(key).show_state(outcome)
             if key in self.rows:
                 self.rows[key].setVisible(shown)
-            link.setVisible(key in offered and not shown)
+            link.setVisible(key in offered)
+            link.show_open(shown)
 
     def show_marks(self, reasons: dict[str, str]) -> None:
         """Mark each field that has a reason."""
@@ -111,8 +112,11 @@ class OptionalFields(FieldsView):
         return self.rows[key]
 
     def _on_opened(self, key: str) -> None:
+        closed = key not in self.rows or self.rows[key].isHidden()
         self._opened.add(key)
         self.show_state(self._outcome)
+        if key == "follow-up" and closed:
+            self.chosen.emit("follow_up_varied", True)  # whoever opens it has something else to say than is assumed
         if key in self.rows:
             self.rows[key].stops[0].setFocus(Qt.FocusReason.OtherFocusReason)
 

@@ -24,7 +24,10 @@ from fourcount.wording.printed_labels import (
     WHERE,
 )
 
-LOSSES = ("randomised_text", "lost_text", "loss_ratio_text")
+LOSSES = ("randomised_text", "lost_text")
+LOSS_RATIO = "loss_ratio_text"
+NAMED = ("icc_text", "cluster_size_text", "adjusted_for_text")
+"""Fields with a word before them, which still says what they are when they are filled."""
 
 
 class Kind(NamedTuple):
@@ -38,7 +41,12 @@ class Kind(NamedTuple):
 ROWS: dict[str, Kind] = {
     "counting": Kind(choice="counting", choices=tuple(COUNTING.items())),
     "follow-up": Kind(choice="follow_up_varied", choices=tuple(FOLLOW_UP.items())),
-    "losses": Kind(texts=tuple(f"{group}_{name}" for group in labels.GROUP_NAMES for name in LOSSES)),
+    "losses": Kind(
+        texts=(
+            *(f"{group}_{name}" for group in labels.GROUP_NAMES for name in LOSSES),
+            *(f"{group}_{LOSS_RATIO}" for group in labels.GROUP_NAMES),
+        )
+    ),
     "clusters": Kind(texts=("icc_text", "cluster_size_text")),
     "adjusted": Kind(
         texts=("adjusted_text", "adjusted_for_text"), choice="adjusted_measure", choices=tuple(PAPER_MEASURES.items())
@@ -83,9 +91,14 @@ class OptionalRow(FieldsView):
             )  # fmt: skip
             self.choice.chosen.connect(self._on_chosen)
         self._texts = {text: self._field(text) for text in kind.texts}
-        self._group_names = {group: Words(look, "small", "muted", name) for group, name in labels.GROUP_NAMES.items()}
+        self._group_names = {
+            group: [Words(look, "small", "muted", name) for _ in range(2)] for group, name in labels.GROUP_NAMES.items()
+        }
         self.close_link = QuietLink(look, key, "×", CLOSE_FIELDS.format(name=OPTIONAL[key]))
         self.close_link.opened.connect(self.closed)
+        policy = self.close_link.sizePolicy()
+        policy.setRetainSizeWhenHidden(True)  # nothing moves while somebody types
+        self.close_link.setSizePolicy(policy)
         self._layout = QGridLayout(self)
         self._layout.setContentsMargins(0, 0, 0, 0)
         self._layout.setColumnStretch(1, 1)
@@ -111,11 +124,11 @@ class OptionalRow(FieldsView):
         for name, field in self._texts.items():
             field.show_text(getattr(outcome, name))
         for group, words in self._group_names.items():
-            words.setText(getattr(outcome, f"{group}_label_text").strip() or labels.GROUP_NAMES[group])
-            if self._key != "losses":
-                words.hide()
-        full = holds(self._key, outcome)
-        self.close_link.setVisible(not full)
+            role = labels.ROLES["index" if outcome.index_group == group else "reference"]
+            for word in words:
+                word.setText(getattr(outcome, f"{group}_label_text").strip() or role)
+                word.setVisible(self._key == "losses")
+        self.close_link.setVisible(not holds(self._key, outcome))
 
     def _build(self, key: str) -> None:
         name = Words(self._look, "body", "muted", OPTIONAL_FIELDS[key], wraps=False)
@@ -131,12 +144,21 @@ class OptionalRow(FieldsView):
         if self.choice:
             line.addWidget(self.choice)
         fields = list(self.fields)
-        last = fields.pop() if key == "adjusted" else None
+        last = fields.pop() if len(fields) > 1 else None
         for field in fields:
-            line.addWidget(field, 1)
-        self._layout.addLayout(line, 0, 1, 1, 2 if last else 1)
+            self._add_named(line, field)
+        self._layout.addLayout(line, 0, 1, 1, 2 if key == "adjusted" else 1)
         if last:
-            self._layout.addWidget(last, 1, 1)
+            under = QHBoxLayout()
+            under.setSpacing(8)
+            self._add_named(under, last)
+            self._layout.addLayout(under, 1, 1)
+
+    def _add_named(self, line: QHBoxLayout, field: TextField) -> None:
+        """A field with the word that says what it is."""
+        if field.field in NAMED:
+            line.addWidget(Words(self._look, "small", "muted", OPTIONAL_FIELDS[f"{field.field}_short"], wraps=False))
+        line.addWidget(field, 1)
 
     def _build_losses(self, name: Words) -> None:
         """A line for each group; the heads say what each field is."""
@@ -155,8 +177,14 @@ class OptionalRow(FieldsView):
                 field.setAlignment(Qt.AlignmentFlag.AlignRight)
                 table.addWidget(field, row, column)
         table.setColumnMinimumWidth(0, 72)
-        for row, words in enumerate(self._group_names.values(), start=1):
-            table.addWidget(words, row, 0)
+        ratio = Words(self._look, "small", "muted", OPTIONAL_FIELDS[LOSS_RATIO])
+        table.addWidget(ratio, 3, 0, 1, 3)
+        for row, (group, (name_above, name_below)) in enumerate(self._group_names.items(), start=1):
+            field = self._texts[f"{group}_{LOSS_RATIO}"]
+            field.setAlignment(Qt.AlignmentFlag.AlignRight)
+            table.addWidget(name_above, row, 0)
+            table.addWidget(name_below, row + 3, 0)
+            table.addWidget(field, row + 3, 1)
 
     def _field(self, text: str) -> TextField:
         for group, name in labels.GROUP_NAMES.items():

@@ -7,6 +7,8 @@ from PySide6.QtGui import QPainter, QPaintEvent
 
 from fourcount.face.links import Link
 from fourcount.face.look import Look
+from fourcount.face.text import tip
+from fourcount.wording.printed_labels import OPENED
 
 
 class QuietLink(Link):
@@ -20,11 +22,19 @@ class QuietLink(Link):
 
     def __init__(self, look: Look, key: str, words: str, name: str = "") -> None:
         self._key = key
+        self._open = False
         super().__init__(look, words)
         if name:
             self.setAccessibleName(name)
-            self.setToolTip(name)
+            self.setToolTip(tip(name))
         self.clicked.connect(self._on_clicked)
+
+    def show_open(self, is_open: bool) -> None:
+        """Keep the place of a link whose row is open, its words in ink; it leads into the row."""
+        if is_open != self._open:
+            self._open = is_open
+            self.setAccessibleDescription(OPENED if is_open else "")
+            self.update()
 
     def minimumSizeHint(self) -> QSize:
         return QSize(self._look.px(24), self._look.px(24))
@@ -39,7 +49,7 @@ class QuietLink(Link):
             return
         painter = QPainter(self)
         painter.setFont(self.font())
-        painter.setPen(self._look.colour("muted"))
+        painter.setPen(self._look.colour("ink" if self._open else "muted"))
         painter.drawText(self.rect(), self._alignment(), self.text())
         painter.end()
 

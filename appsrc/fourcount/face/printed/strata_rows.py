@@ -180,7 +180,7 @@ class StrataRows(FieldsView):
         elif column < len(CELLS) - 1:
             self.go_to(place, CELLS[column + 1])
         elif place + 1 < self._count:
-            self.go_to(place + 1)
+            self.go_to(place + 1, "label_text" if key == Qt.Key.Key_Right else CELLS[0])
         elif key != Qt.Key.Key_Right:
             self.row_wanted.emit()
 
