@@ -8,6 +8,7 @@ from itertools import pairwise
 
 import msgspec
 
+from fourcount.record.entry.figure_names import name_at
 from fourcount.record.entry.pasted.doubts import PASTE_DOUBTS
 from fourcount.record.entry.pasted.event_words import event_words, time_span
 from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
@@ -24,6 +25,7 @@ from fourcount.record.entry.pasted.vocabulary import (
     LINKING,
     NOT_PEOPLE,
     PEOPLE,
+    VERBS,
 )
 from fourcount.record.entry.printed import named_figures
 from fourcount.record.entry.readings import Pasted
@@ -202,6 +204,10 @@ class SentenceReader:
         doubts += ["not-compared"] if nested and "not-compared" not in doubts else []
         return self._pasted((first, second), labels, (start, end), doubts, quantities)
 
+    def _changed(self, first: Quantity, second: Quantity) -> bool:
+        """Whether a count is said to go "from" one "to" the other."""
+        return self.tokens[first.first - 1].lower == "from" and self.tokens[second.first - 1].lower == "to"
+
     def _of_people(self, first: Quantity, second: Quantity) -> bool:
         """Whether "1 of 96 and 14 of 98 children" stands there: two counts of people side by side."""
         between = [token.lower for token in self.tokens[first.after : second.first]]
@@ -231,11 +237,13 @@ class SentenceReader:
         """Whether anything says that the two are groups of one comparison."""
         between = {token.lower for token in self.tokens[first.after : second.first]}
         around = {token.lower for token in self.tokens[bounds[0] : bounds[1]]}
-        effect = any(figure.measure in _EFFECTS for figure in self.figures)
+        effect = any(figure.measure in (*_EFFECTS, "relative_reduction") for figure in self.figures)
         if of_own_total(first) and of_own_total(second):
             nested = first.events and second.total and first.events.whole == second.total.whole
             return not nested and (all(labels) or "respectively" in around)
         if COMPARATORS & between or _GROUP_WORDS & around or effect or (self.figures and all(labels)):
+            return True
+        if not strictly and self._changed(first, second) and first.percent and second.percent:
             return True
         if strictly or not all(labels):
             return False
@@ -243,7 +251,7 @@ class SentenceReader:
         behind = {token.lower for token in self.tokens[second.after : bounds[1]]}
         ahead = {token.lower for token in self.tokens[bounds[0] : first.first]}
         noun = self.tokens[first.after]
-        people = noun.kind != "word" or noun.lower in INTRODUCERS | PEOPLE | LINKING
+        people = noun.kind != "word" or noun.lower in INTRODUCERS | PEOPLE | LINKING | VERBS
         return told or (people and bool(INTRODUCERS & between and INTRODUCERS & (behind | ahead)))
 
     def _pasted(
@@ -256,6 +264,7 @@ class SentenceReader:
     ) -> Pasted:
         form = form_of(pair)
         words = event_words(self.printed, pair[0], pair[1], *bounds)
+        words = "" if words and name_at(take_apart(words).tokens, 0) else words
         if any(each.percent and each.events and each.total and not agrees(each) for each in pair):
             doubts.append("percent-disagrees")
         others = [
@@ -265,7 +274,7 @@ class SentenceReader:
         ]
         if others and not (pair[0].time and not others[0].time):
             doubts.append("more-counts")
-        if self.tokens[pair[0].first - 1].lower == "from" and self.tokens[pair[1].first - 1].lower == "to":
+        if self._changed(*pair):
             doubts.append("changed-count")
         return Pasted(
             form=form,

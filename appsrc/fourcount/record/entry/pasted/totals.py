@@ -130,7 +130,7 @@ def _ways(
     behind = [each for each in found if second.after <= each.place < end][:_MOST]
     after = [each for each in found if each.place >= second.after][:_MOST]
     near = (*behind, *before[::-1]) if first.events is not None else behind
-    each_group = [each for each in near if _of_each(tokens, each.place)]
+    each_group = [each for each in near if _of_each(tokens, each.place, people=first.events is not None)]
     yield from (((each, each), each in behind) for each in each_group)
     own_first, own_second = first.total is not None, second.total is not None
     if own_first and own_second:
@@ -152,9 +152,10 @@ def _ways(
         )
 
 
-def _of_each(tokens: Sequence[Token], place: int) -> bool:
+def _of_each(tokens: Sequence[Token], place: int, *, people: bool = False) -> bool:
     """Whether a number is the total of both groups: "of 300 each"."""
-    behind = [token.lower for token in tokens[place + 1 : place + 4]]
+    behind = [token.lower for token in tokens[place + 1 : place + 5]]
+    behind = behind[1:] if people and behind[:1] and behind[0] in PEOPLE else behind
     return behind[:1] in (["each"], ["per"]) or behind[:2] in (["to", "each"], ["in", "each"])
 
 
