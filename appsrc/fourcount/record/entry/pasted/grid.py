@@ -47,9 +47,21 @@ def read_grid(text: str) -> Grid | None:
         pieces = split(line)
         if len(pieces) > MOST_COLUMNS:
             return None
-        cells = row_cells(line) if len(pieces) == 1 else [cell for piece in pieces for cell in delimited_cell(piece)]
+        cells = row_cells(line) if len(pieces) == 1 else _delimited(pieces)
         rows.append(tuple(cells[:MOST_COLUMNS]))
     return Grid(tuple(rows), comma_pairs, results)
+
+
+def _delimited(pieces: Sequence[str]) -> list[Cell]:
+    """The cells between borders; a result with its name, "RR 0.54 (0.37 to 0.78)", is one unless it stands first."""
+    cells: list[Cell] = []
+    for piece in pieces:
+        found = delimited_cell(piece)
+        limits = "(" in piece or "[" in piece
+        if cells and limits and len(found) == 1 and found[0].label and _is_result(piece.strip()):
+            found = [Cell(text=piece.strip(), result=piece.strip())]
+        cells += found
+    return cells
 
 
 def _is_result(line: str) -> bool:
