@@ -95,7 +95,7 @@ def test_no_raw_value_reaches_a_reader() -> None:
         assert not RAW.search(listing(*arguments)), question
         record = Record(outcomes=(question.outcome,), choices=question.choices)
         sheet = tsv(record, question.outcome, findings, version="0", today=date(2026, 1, 1))
-        assert all(row.count("\t") == 4 for row in sheet.splitlines()), question
+        assert all(row.count("\t") == 5 for row in sheet.splitlines()), question
         with np.errstate(all="raise", under="ignore"):
             given = contract(question.outcome, question.choices, findings)
         assert json.loads(json.dumps(given, allow_nan=False)) == given, question

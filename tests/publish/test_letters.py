@@ -16,7 +16,8 @@ from fourcount.record.paper import Choices
 LETTER = """\
 Falls · Night lights on a rehabilitation ward · invented example · table 2
 
-Usual care: 70 fell at least once, 339 did not fall. Night lights: 38 fell at least once, 374 did not fall.
+Randomised trial. Usual care: 70 fell at least once, 339 did not fall. Night lights: 38 fell at least once, 374 did \
+not fall.
 
 Of 100 people with usual care about 17 fell at least once within 12 months; of 100 with night lights about 9. That is \
 8 fewer, and could be as few as 3 or as many as 13 (95% interval).
@@ -24,11 +25,14 @@ Of 100 people with usual care about 17 fell at least once within 12 months; of 1
 - Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409
 - Risk with night lights: 9.2% (95% interval 6.8 to 12.4%), 38 of 412
 - Difference: 7.9 fewer per 100 (95% interval 3.3 to 12.6)
-- NNTB 13 (95% interval 8 to 31) over 12 months
+- Number needed to treat for one to benefit (NNTB) 13 (95% interval 8 to 31) over 12 months
 - Risk ratio: 0.54 (95% interval 0.37 to 0.78), relative reduction 46%
 - Odds ratio: 0.49 (95% interval 0.32 to 0.75), as a risk ratio at 12%: 0.52 (0.35 to 0.77)
 - p < 0.001, two-sided (N−1 chi-square). It does not say how large the effect is; the \
 intervals do.
+
+The paper’s result: 0.54 (0.37 to 0.78) follows from the counts: the risk ratio is 0.539 (0.372 to 0.781) by the \
+method shown, Miettinen–Nurminen score, or by Katz log and 1 other method, at 95%.
 
 For one patient: starting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant. Of 100 people with \
 usual care 12 fell at least once within 12 months, of 100 with night lights 6: 6 fewer in 100 (95% interval 3 to 8). \
@@ -85,7 +89,7 @@ def test_a_letter_says_a_reason_and_a_correction_once() -> None:
 def test_a_number_needed_without_a_span_or_a_kind_says_so() -> None:
     """Equal groups have an NNT that is infinite; nobody takes a number for one of no time."""
     text = letter(outcome_of((10, 90, 10, 90)))
-    assert "- NNT ∞ (95% interval NNTB 12 to ∞ to NNTH 12), time span not given\n" in text
+    assert "- Number needed to treat (NNT) ∞ (95% interval NNTB 12 to ∞ to NNTH 12), time span not given\n" in text
     equal = {row[0]: row for row in table_of(outcome_of((10, 90, 10, 90), risk="12%"))}
     assert equal["For one patient, 12%: NNT"][1] == "infinity"
 
@@ -105,3 +109,20 @@ def test_a_full_stop_in_a_name_breaks_no_sentence() -> None:
     """Typed at the end of a name, it stands nowhere inside a sentence of ours."""
     text = letter(outcome_of((38, 374, 70, 339), label="Name.", risk="12%"))
     assert not re.search(r"Name\. [a-z(0-9]|Name\.[,:;)]|Name\.\.", text, re.IGNORECASE)
+
+
+def figures_of(text: str) -> str:
+    """What stands between the counts and the patient."""
+    return text.split("\n\n", 1)[1].split("\n\nFor one patient", maxsplit=1)[0]
+
+
+def test_a_letter_says_what_the_paper_prints_and_whether_it_follows() -> None:
+    """The first sentence of the check stands for the others; without a printed result there is nothing of it."""
+    odd = msgspec.structs.replace(OUTCOME, paper_text="RR 0.45 (0.37 to 0.78), P = 0.001")
+    assert "The paper prints RR 0.45 (0.37 to 0.78), P = 0.001. Check" in letter(odd)
+    assert "paper" not in figures_of(letter(msgspec.structs.replace(OUTCOME, paper_text="")))
+
+
+def test_a_letter_names_the_kind_of_study() -> None:
+    """What follows from a table depends on it."""
+    assert "\nCase-control study. " in letter(outcome_of((38, 374, 70, 339), design="case-control"))

@@ -13,6 +13,7 @@ from copies import NUMBER, OUTCOME, RECORD, outcome_of, record_of, table_of
 from fourcount.appraisal.appraise import appraise
 from fourcount.publish.sheet import html, rows
 from fourcount.record.paper import Choices
+from fourcount.wording.cautions import caution_text
 from fourcount.wording.exports import SHEET_HEAD
 
 
@@ -20,7 +21,7 @@ def test_a_limit_beyond_everybody_is_told_from_an_estimate_beyond_everybody() ->
     """A blank upper limit beside a risk that stands says that it is the limit that would pass 100%."""
     outcome = outcome_of((70, 339, 38, 374), risk="45%")
     found = {row[0].removeprefix("For one patient, "): row for row in table_of(outcome)}
-    _, estimate, _, high, reason = found["45%: risk with"]
+    _, estimate, _, high, _, reason = found["45%: risk with"]
     assert NUMBER.fullmatch(estimate)
     assert high == ""
     assert "The upper limit of the risk would pass 100%" in reason
@@ -28,7 +29,7 @@ def test_a_limit_beyond_everybody_is_told_from_an_estimate_beyond_everybody() ->
         row[0].removeprefix("For one patient, "): row for row in table_of(outcome_of((70, 339, 38, 374), risk="70%"))
     }
     assert above["70%: risk with"][1] == ""
-    assert "The risk would pass 100% here" in above["70%: risk with"][4]
+    assert "The risk would pass 100% here" in above["70%: risk with"][5]
 
 
 def test_a_sheet_holds_unrounded_numbers() -> None:
@@ -36,7 +37,7 @@ def test_a_sheet_holds_unrounded_numbers() -> None:
     found = {row[0]: row for row in table_of(OUTCOME)}
     assert table_of(OUTCOME)[0] == SHEET_HEAD
     assert float(found["Difference"][1]) == float(Fraction(38, 412) - Fraction(70, 409))
-    assert found["Odds ratio"][4] == "miettinen-nurminen"
+    assert found["Odds ratio"][4] == "Miettinen–Nurminen score"
     assert float(found["p, two-sided"][1]) == pytest.approx(0.000829, abs=5e-7)
 
 
@@ -46,7 +47,8 @@ def test_a_sheet_says_what_it_is_about_and_who_made_it() -> None:
     first, *table = rows(RECORD, OUTCOME, findings, version="9.9", today=date(2030, 5, 1))
     assert first == SHEET_HEAD
     assert [row[0] for row in table[:3]] == [OUTCOME.name_text, RECORD.title_text, RECORD.source_text]
-    assert table[-1][0] == "Calculated with Fourcount 9.9 on 2030-05-01; score intervals at 95%."
+    assert table[-1][0] == "note"
+    assert table[-1][5] == "Calculated with Fourcount 9.9 on 2030-05-01; score intervals at 95%."
     assert table_of(outcome_of((1, 2, 3, 4)))[1][0] == "A paper"
 
 
@@ -65,7 +67,7 @@ def test_a_limit_of_another_kind_names_it() -> None:
     row = found["NNTB in the study"]
     assert NUMBER.fullmatch(row[2])
     assert row[3].startswith("NNTH ")
-    assert row[4]
+    assert row[5]
 
 
 def test_a_table_of_html_escapes_what_was_typed() -> None:
@@ -84,13 +86,33 @@ def test_a_sheet_leaves_blank_what_is_withheld_and_repeats_no_row() -> None:
     """One limit of the number needed; the odds ratio at the study's own risk, where it is the risk ratio."""
     found = {row[0]: row for row in table_of(outcome_of((80, 20, 40, 60), risk="45%"))}
     needed = found["For one patient, 45%: NNTH"]
-    assert (needed[2], bool(NUMBER.fullmatch(needed[3])), "would pass 100%" in needed[4]) == ("", True, True)
+    assert (needed[2], bool(NUMBER.fullmatch(needed[3])), "would pass 100%" in needed[5]) == ("", True, True)
     assert not any("as a risk ratio" in row[0] for row in table_of(outcome_of((80, 20, 40, 60))))
 
 
 def test_a_reason_stands_once_in_its_row() -> None:
     """An interval that is withheld leaves two blanks and one reason."""
     found = {row[0]: row for row in table_of(outcome_of((0, 50, 0, 50)), Choices(family="textbook"))}
-    _, estimate, low, high, method = found["Risk, reference group"]
+    _, estimate, low, high, method, reason = found["Risk, reference group"]
     assert (estimate, low, high) == ("0.0", "", "")
-    assert method == "wald; An interval of zero width is withheld; the score family gives a real one."
+    assert (method, reason) == ("Wald", "An interval of zero width is withheld; the score family gives a real one.")
+
+
+def test_cautions_stand_in_a_column_of_their_own() -> None:
+    """Nobody reads a sentence for a measure."""
+    outcome = outcome_of((38, 374, 70, 339), design="cohort")
+    told = {row[5] for row in table_of(outcome) if row[0] == "caution"}
+    assert told == {caution_text(caution) for caution in appraise(outcome, Choices()).cautions}
+    assert all(row[:5] == ("caution", "", "", "", "") for row in table_of(outcome) if row[5] in told)
+
+
+@pytest.mark.parametrize(
+    ("counts", "cell"), [((38, 374, 70, 339), "0.000829"), ((900, 100, 100, 900), None), ((7, 3, 3, 7), "0.08124")]
+)
+def test_a_p_has_four_significant_digits(counts: tuple[int, ...], cell: str | None) -> None:
+    """Written out, also where it is tiny: more digits mean nothing."""
+    found = {row[0]: row for row in table_of(outcome_of(counts))}["p, two-sided"]
+    assert cell is None or found[1] == cell
+    assert "e" not in found[1]
+    assert 1 <= len(found[1].replace(".", "").lstrip("0")) <= 4
+    assert found[4] == "N−1 chi-square"

@@ -72,6 +72,8 @@ def needed_text(line: MeasureLine, outcome: Outcome, level: str) -> str:
     span = names.over_span(outcome)
     over = f" {span}" if span else f", {lines.NO_SPAN}"
     name = line.name.removesuffix(lines.IN_THE_STUDY)
+    kind = name.split(",")[0]
+    name = name.replace(kind, exports.NEEDED.get(kind, kind), 1)
     return f"{name} {line.estimate} ({level} {line.interval}){over}{names.if_caused(outcome)}"
 
 

@@ -10,6 +10,7 @@ from fourcount.publish import groups
 from fourcount.publish.letter_figures import figure_lines
 from fourcount.publish.letter_forms import beside_lines, form_lines, rests_on
 from fourcount.publish.made_with import made_with
+from fourcount.publish.paper import paper_says, study
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import COUNTED_FORMS, Outcome
 from fourcount.record.paper import Choices, Record
@@ -30,9 +31,10 @@ def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, versio
     choices = record.choices
     paragraphs = [
         one_line(picture_heading(record, outcome)),
-        one_line(_counts(outcome, findings)),
+        one_line(f"{study(outcome)} {_counts(outcome, findings)}"),
         one_line(headline(outcome, findings, choices)),
         _figures(outcome, findings, choices),
+        one_line(" ".join(paper_says(outcome, findings, choices))),
         one_line(_patient(outcome, findings, choices)),
         _cautions(findings),
         one_line(" ".join(STANDING_FULL)),

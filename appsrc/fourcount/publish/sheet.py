@@ -5,12 +5,13 @@ from __future__ import annotations
 from datetime import date
 from html import escape
 
-from fourcount.appraisal.findings import Conversion, Gap, OutcomeFindings, PatientFindings, StrataFindings
+from fourcount.appraisal.findings import Gap, OutcomeFindings, StrataFindings
 from fourcount.publish.made_with import made_with
+from fourcount.publish.paper import paper_says, study
 from fourcount.publish.plain_text import one_line
 from fourcount.publish.sheet_counts import basis_rows
 from fourcount.publish.sheet_extras import extra_rows
-from fourcount.publish.sheet_rows import Row, figure_row, measure_row, number_cell, text_row
+from fourcount.publish.sheet_rows import Row, figure_row, measure_row, note_row, p_cell, text_row
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import exports, labels, limits, lines, names, numbers
@@ -19,7 +20,7 @@ from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.form import measure_of, shown_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines.strata import STRATUM_KEY
-from fourcount.wording.p_value import own_p, why_no_p
+from fourcount.wording.p_value import PRINTED, own_p, test_title, why_no_p
 from fourcount.wording.person_time import unit
 
 # Behind any blanks, a spreadsheet takes these for the beginning of a formula, and a quotation mark for that of a field
@@ -28,15 +29,21 @@ _TAKEN_FOR_MORE = ("=", "+", "-", "@", "\uff1d", "\uff0b", "\uff0d", "\uff20", "
 
 
 def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version: str, today: date) -> tuple[Row, ...]:
-    """What it is about, the counts, every measure, p, the patient, the cautions, the version; five columns throughout.
+    """What it is about, the counts, every measure, p, the patient, the cautions, the version; six columns throughout.
 
-    A figure that is not given has blank cells, and the reason stands under "method". Only cells that hold a number
-    may begin with a minus sign: all others are text to a spreadsheet, whatever the reader typed.
+    A figure that is not given has blank cells, and the reason stands under "note", as every caution does. Only cells
+    that hold a number may begin with a minus sign: all others are text to a spreadsheet, whatever the reader typed.
     """
     choices = record.choices
     shown = shown_choices(findings, choices)
-    cautions = [caution_text(caution) for caution in findings.cautions]
-    about = (names.outcome_name(outcome), record.title_text, record.source_text)
+    about = (names.outcome_name(outcome), record.title_text, record.source_text, study(outcome))
+    notes = [
+        *paper_says(outcome, findings, choices),
+        exports.UNROUNDED.format(level=numbers.level(shown.level)),
+        *([exports.PER_UNIT.format(unit=unit(outcome))] if findings.form == "person-time" else []),
+        *STANDING_FULL,
+        made_with(shown, version, today, findings.form),
+    ]
     table = (
         exports.SHEET_HEAD,
         *(text_row(text) for text in about if text.strip()),
@@ -44,15 +51,15 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
         *_measures(outcome, findings, choices),
         *extra_rows(outcome, findings, choices),
         _p(findings),
-        *_converted(findings.conversion),
-        *_patient(outcome, findings.patient),
-        *(text_row(caution) for caution in cautions),
-        text_row(exports.UNROUNDED.format(level=numbers.level(shown.level))),
-        *([text_row(exports.PER_UNIT.format(unit=unit(outcome)))] if findings.form == "person-time" else []),
-        *(text_row(sentence) for sentence in STANDING_FULL),
-        text_row(made_with(shown, version, today, findings.form)),
+        *_converted(findings),
+        *_patient(outcome, findings),
+        *(note_row(exports.CAUTION_ROW, caution_text(caution)) for caution in findings.cautions),
+        *(note_row(exports.NOTE_ROW, note) for note in notes),
     )
-    return tuple((_safe(name), estimate, low, high, _safe(method)) for name, estimate, low, high, method in table)
+    return tuple(
+        (_safe(name), estimate, low, high, _safe(method), _safe(note))
+        for name, estimate, low, high, method, note in table
+    )
 
 
 def tsv(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version: str, today: date) -> str:
@@ -74,32 +81,41 @@ def _html_row(row: Row, tag: str) -> str:
 def _measures(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
     """Every measure in the order of the screen; of strata one by one their measures in full."""
     shown = [line for line in lines.measure_lines(outcome, findings, choices) if not line.key.startswith(STRATUM_KEY)]
-    table = [measure_row(line.name, measure_of(line.key, findings)) for line in shown]
+    form = findings.form
+    table = [measure_row(line.name, measure_of(line.key, findings), line.key, form) for line in shown]
     strata = findings.strata.strata if isinstance(findings.strata, StrataFindings) else ()
     for stratum in strata:
-        named = ((f"{stratum.label}: {lines.measure_name(key, outcome)}", m) for key, m in stratum.measures.items())
-        table += [measure_row(name, measure) for name, measure in named]
+        for key, measure in stratum.measures.items():
+            table.append(measure_row(f"{stratum.label}: {lines.measure_name(key, outcome)}", measure, key, form))
     return tuple(table)
 
 
 def _p(findings: OutcomeFindings) -> Row:
     test = own_p(findings)
     if isinstance(test, Gap):
-        return (exports.P_NAME, "", "", "", why_no_p(test))
-    reason = f"; {gap_text(test.p)}" if isinstance(test.p, Gap) else ""
-    return (exports.P_NAME, number_cell(test.p), "", "", f"{test.method}{reason}")
+        return (exports.P_NAME, "", "", "", "", why_no_p(test))
+    title = exports.WORKED_OUT if test.method in PRINTED else test_title(test.method)
+    return (exports.P_NAME, p_cell(test.p), "", "", title, gap_text(test.p) if isinstance(test.p, Gap) else "")
 
 
-def _converted(conversion: Conversion | Gap) -> tuple[Row, ...]:
+def _converted(findings: OutcomeFindings) -> tuple[Row, ...]:
     """Only at a starting risk from elsewhere: at the study's own it is the risk ratio, which has a row."""
+    conversion = findings.conversion
     if isinstance(conversion, Gap) or conversion.baseline_from == "reference":
         return ()
     baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
-    return (figure_row(exports.CONVERTED.format(baseline=baseline), conversion.risk_ratio),)
+    name = exports.CONVERTED.format(baseline=baseline)
+    return (figure_row(name, conversion.risk_ratio, _key_of("odds_ratio", findings), findings.form),)
 
 
-def _patient(outcome: Outcome, patient: PatientFindings | Gap) -> tuple[Row, ...]:
+def _key_of(effect: str, findings: OutcomeFindings) -> str:
+    """Under which key an effect's method stands: strata are carried pooled."""
+    return f"pooled_{effect}" if findings.form == "strata" else effect
+
+
+def _patient(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
     """Only at a starting risk from elsewhere: at the study's own the rows above say the same."""
+    patient = findings.patient
     if isinstance(patient, Gap) or patient.baseline_from == "reference":
         return ()
     baseline = lines.baseline_text(patient.baseline, patient.baseline_from)
@@ -109,13 +125,14 @@ def _patient(outcome: Outcome, patient: PatientFindings | Gap) -> tuple[Row, ...
     def named(name: str) -> str:
         return exports.PATIENT.format(column=labels.COLUMNS["patient"], baseline=baseline, name=name)
 
+    key, form = _key_of(patient.effect, findings), findings.form
     return (
         text_row(named(basis(outcome, patient))),
-        figure_row(named(rows["without"]), patient.without),
-        figure_row(named(rows["with"]), patient.with_),
-        figure_row(named(rows["difference"]), patient.difference),
-        measure_row(named(limits.needed_kind(needed)), needed),
-        figure_row(named(rows["risk_ratio"]), patient.risk_ratio),
+        figure_row(named(rows["without"]), patient.without, key, form),
+        figure_row(named(rows["with"]), patient.with_, key, form),
+        figure_row(named(rows["difference"]), patient.difference, key, form),
+        measure_row(named(limits.needed_kind(needed)), needed, key, form),
+        figure_row(named(rows["risk_ratio"]), patient.risk_ratio, key, form),
     )
 
 

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from fourcount.appraisal.findings import Counts, OutcomeFindings, PairCounts, PrintedFigure, Rates, StrataFindings
 from fourcount.publish import groups
-from fourcount.publish.sheet_rows import Row, number_cell, text_row
+from fourcount.publish.sheet_rows import Row, count_row, text_row
 from fourcount.record.outcome import Outcome
 from fourcount.wording import exports, names
 from fourcount.wording.form import given
@@ -33,8 +33,8 @@ def _counts(outcome: Outcome, counts: Counts, before: str = "") -> tuple[Row, ..
     for group, events, total in groups.people(counts):
         where = names.in_group(outcome, group)
         with_event = exports.PEOPLE_WITH_EVENT.format(group=where, event=names.event_words(outcome))
-        table.append((f"{before}{with_event}", str(events), "", "", ""))
-        table.append((f"{before}{exports.ALL_PEOPLE.format(group=where)}", str(total), "", "", ""))
+        table.append(count_row(f"{before}{with_event}", events))
+        table.append(count_row(f"{before}{exports.ALL_PEOPLE.format(group=where)}", total))
     return tuple(table)
 
 
@@ -42,8 +42,8 @@ def _rates(outcome: Outcome, rates: Rates) -> tuple[Row, ...]:
     table: list[Row] = []
     for group, events, time in groups.person_time(rates):
         where = names.in_group(outcome, group)
-        table.append((exports.EVENTS_IN_GROUP.format(group=where), str(events), "", "", ""))
-        table.append((exports.TIME_IN_GROUP.format(group=where, unit=unit(outcome)), number_cell(time), "", "", ""))
+        table.append(count_row(exports.EVENTS_IN_GROUP.format(group=where), events))
+        table.append(count_row(exports.TIME_IN_GROUP.format(group=where, unit=unit(outcome)), float(time)))
     return tuple(table)
 
 
@@ -57,4 +57,4 @@ def _pairs(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
         counts = [(both, pairs.both), *counts, (neither, pairs.neither)]
     event, called = names.event_words(outcome), exports.SAME_PEOPLE if twice else exports.PAIRS
     named = [(exports.PAIRS_WITH_EVENT.format(pairs=called, event=event, where=w), number) for w, number in counts]
-    return tuple((name, str(number), "", "", "") for name, number in named)
+    return tuple(count_row(name, number) for name, number in named)

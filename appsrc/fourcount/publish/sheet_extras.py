@@ -14,7 +14,7 @@ from fourcount.appraisal.findings import (
     PrintedFigure,
     Recovered,
 )
-from fourcount.publish.sheet_rows import Row, figure_row, number_cell
+from fourcount.publish.sheet_rows import Row, figure_row, number_cell, p_cell
 from fourcount.record.entry.readings import PrintedNumber
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
@@ -39,22 +39,23 @@ def extra_rows(outcome: Outcome, findings: OutcomeFindings, choices: Choices) ->
 
 def _row(line: MeasureLine, findings: OutcomeFindings) -> Row:
     if line.withheld:
-        return (line.name, "", "", "", line.withheld)
+        return (line.name, "", "", "", "", line.withheld)
     losses, extra = findings.extras.losses, getattr(findings.extras, line.key.partition(".")[0])
     if isinstance(losses, Losses) and extra is losses:
         scenario = next(one for one in losses.scenarios if f"losses.{one.key}" == line.key)
-        return figure_row(f"{line.name}: {exports.PATIENT_ROWS['difference']}", scenario.difference)
+        name = f"{line.name}: {exports.PATIENT_ROWS['difference']}"
+        return figure_row(name, scenario.difference, "risk_difference", findings.form)
     if isinstance(extra, Figure):
-        return figure_row(line.name, extra)
+        return figure_row(line.name, extra, line.key, findings.form)
     cells = _cells(extra)
-    return (line.name, cells.estimate, cells.low, cells.high, "; ".join(filter(None, (line.detail, line.note))))
+    return (line.name, cells.estimate, cells.low, cells.high, "", "; ".join(filter(None, (line.detail, line.note))))
 
 
 def _cells(extra: object) -> _Cells:
     if isinstance(extra, PrintedFigure):
         return _Cells(_printed(extra.estimate), _printed(extra.low), _printed(extra.high))
     if isinstance(extra, Recovered):
-        return _Cells(number_cell(extra.p))
+        return _Cells(p_cell(extra.p))
     if isinstance(extra, Clusters):
         return _Cells(number_cell(extra.design_effect))
     if isinstance(extra, EValues):

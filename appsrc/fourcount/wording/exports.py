@@ -9,10 +9,26 @@ NO_EXACT_RATE_DIFFERENCE = "The difference of the rates has a score interval, fo
 POOLED_BY = "Pooled by Mantel and Haenszel."
 PRINTED_FAMILY = "printed"
 
-SHEET_HEAD = ("measure", "estimate", "low", "high", "method")
+SHEET_HEAD = ("measure", "estimate", "low", "high", "method", "note")
+CAUTION_ROW = "caution"
+NOTE_ROW = "note"
+STUDY = "{design}."
+PAPER_PRINTS = "The paper prints {text}."
+PAPER_RESULT = "The paper’s result: {said}"
+WORKED_OUT = "worked out from the printed figures"
+METHOD_AS_PRINTED = "as printed"
+NEEDED = {
+    "NNTB": "Number needed to treat for one to benefit (NNTB)",
+    "NNTH": "Number needed to treat for one to be harmed (NNTH)",
+    "NNT": "Number needed to treat (NNT)",
+}
+"""A letter's reader may not know the letters."""
+
 SHEET_INFINITY = "infinity"
 THROUGH_INFINITY = "the interval runs through infinity"
-UNROUNDED = "Risks and differences are fractions, index minus reference; all figures are unrounded. Level {level}."
+UNROUNDED = (
+    "Risks and differences are fractions, index minus reference; all figures but p are unrounded. Level {level}."
+)
 PEOPLE_WITH_EVENT = "People {group} who {event}"
 ALL_PEOPLE = "People {group}, all"
 P_NAME = "p, two-sided"
