@@ -85,7 +85,7 @@ def meaning(key, outcome):
             paired("before-after", (14, 5, 2, 22), **UNNAMED),
             (
                 "Of 100 people about 37 had the event before and about 44 after. That is 7 more, and could be anything "
-                "from 6 fewer to 19 more (95% interval): compatible with fewer and with more."
+                "from 6 fewer to 19 more (95% interval)."
             ),
         ),
         (
@@ -128,8 +128,7 @@ def meaning(key, outcome):
             person_time((0, 4120, 3, 4090), design="trial"),
             (
                 "With usual care there were 7.3 events (“fell at least once”) per 10,000 person-years; with night "
-                "lights none. That is 7.3 fewer, and could be anything from 21.6 fewer to 2.0 more (95% interval): "
-                "compatible with fewer and with more."
+                "lights none. That is 7.3 fewer, and could be anything from 21.6 fewer to 2.0 more (95% interval)."
             ),
         ),
         (
@@ -246,3 +245,14 @@ def test_strata_say_whether_one_odds_ratio_may_hold():
 def test_printed_risks_have_no_p_and_say_why():
     """Not that four counts are missing."""
     assert p_sentence(appraise(at_time(), Choices())).startswith("Two printed risks have no p of their own")
+
+
+@pytest.mark.parametrize(
+    "outcome",
+    [of_total((5, 50, 6, 50)), paired("before-after", (14, 5, 2, 22)), person_time((3, 100, 4, 100)),
+     at_time(("9%", "6 to 20", "12%", "8 to 18"))],
+)  # fmt: skip
+def test_an_interval_through_no_effect_is_explained_once(outcome):
+    """The headline gives both ends, and the caution what that means."""
+    assert "compatible" not in said(outcome)
+    assert "through-no-effect" in {caution.key for caution in appraise(outcome, Choices()).cautions}

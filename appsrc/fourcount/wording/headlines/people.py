@@ -9,7 +9,6 @@ from fourcount.wording import limits, names, numbers, of_people
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import DO_NOT_ADD_UP, People, choose, limits_apart
 
-COMPATIBLE = "compatible with fewer and with more"
 PAST_EVERYBODY = "The bare formula’s {level} interval reaches past 100 in 100, so it is not put into people."
 
 
@@ -63,8 +62,7 @@ def _difference(difference: float, people: People, interval: Interval | Range | 
     if low * difference > 0 and high * difference > 0:
         return f"{said}{_reach(interval, people, level)}."
     start = f"{said}, and could be" if difference else "The difference could be"
-    both = f": {COMPATIBLE}" if low < 0 < high else ""
-    return f"{start} anything from {_sided(low, people)} to {_sided(high, people)} {level}{both}."
+    return f"{start} anything from {_sided(low, people)} to {_sided(high, people)} {level}."
 
 
 def _reach(interval: Interval | Range, people: People, level: str) -> str:

@@ -7,7 +7,6 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers
 from fourcount.wording.gaps import gap_text
-from fourcount.wording.headlines.people import COMPATIBLE
 from fourcount.wording.person_time import per_units, unit_sum
 
 EVENTS = "events"
@@ -45,5 +44,4 @@ def _change(difference: Figure, per: int, choices: Choices) -> str:
     if interval.low * estimate > 0 and interval.high * estimate > 0:
         few, many = reach.split(numbers.TO)
         return f"{said}, and could be as few as {few} or as many as {many} {level}."
-    both = f": {COMPATIBLE}" if interval.low < 0 < interval.high else ""
-    return f"{said}, and could be anything from {reach} {level}{both}."
+    return f"{said}, and could be anything from {reach} {level}."
