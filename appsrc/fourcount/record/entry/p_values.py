@@ -15,7 +15,7 @@ Relation = Literal["=", "<", ">"]
 
 _P_WORDS = ("p", "p-value", "p-values")
 _NOT_OF_AN_EFFECT = ("interaction", "trend", "heterogeneity", "noninferiority", "non-inferiority", "homogeneity")
-_BETWEEN = ("value", "values", "of", "was", "is", "for", "the", "by", "less", "than", "=", "<", ">")
+_BETWEEN = ("value", "values", "of", "was", "is", "for", "the", "by", "less", "than", "=", ":", "<", ">")
 _FARTHEST = 9
 _STATISTICS = ("\u03c72", "\u03c7\u00b2", "chi2", "x2", "chi-square", "chi-squared", "z", "t", "f", "df", "d.f")
 _EXPONENT = re.compile(r"e-([0-9]{1,3})")
