@@ -114,7 +114,7 @@ def _others(figure: Figure, people: int, outcome: Outcome) -> str:
 def _key(verb: str, outcome: Outcome) -> str:
     if outcome.welcome:
         verb = {"avoided": "lost", "added": "gained"}[verb]
-    name = names.mid_sentence(outcome.name_text.strip()) if outcome.counted == "left" else ""
+    name = names.mid_sentence(names.outcome_name(outcome)) if outcome.counted == "left" else ""
     return f"{name} {verb}, on balance" if name and len(name) <= LONGEST_KEY else f"{verb}, on balance"
 
 
