@@ -15,7 +15,7 @@ if TYPE_CHECKING:
     from fourcount.face.look import Look
 
 
-DIALOG_WIDTH = 360
+DIALOG_WIDTH = 460
 """Wide enough for a dialog's title."""
 
 

@@ -277,10 +277,9 @@ class ChoiceField(QComboBox):
                 self.setItemText(index, text)
 
     def showPopup(self) -> None:
-        if self._notes:
-            from fourcount.face.printed.specimens import show_notes
+        from fourcount.face.printed.specimens import show_notes
 
-            show_notes(self, self._look, self._notes)
+        show_notes(self, self._look, self._notes or {})
         super().showPopup()
 
     def wheelEvent(self, event: QEvent) -> None:
@@ -311,9 +310,21 @@ class ChoiceField(QComboBox):
         )
         painter.drawText(text_area, Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter, words)
         painter.drawText(self.rect(), Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter, "▾")
+        if self._notes:
+            used = self.fontMetrics().horizontalAdvance(words) + self._look.px(10)
+            self._draw_note(painter, text_area.adjusted(used, 0, 0, 0))
         if not self._plain or self.hasFocus():
             draw_underline(self, painter, self._look)
         painter.end()
+
+    def _draw_note(self, painter: QPainter, area: QRect) -> None:
+        """What the choice stands for, beside it, where there is room for all of it."""
+        note = self._notes[self.currentData()] if self._notes else ""
+        painter.setFont(self._look.font("small"))
+        if painter.fontMetrics().horizontalAdvance(note) <= area.width():
+            painter.setPen(self._look.colour("muted"))
+            painter.drawText(area, Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter, note)
+        painter.setFont(self.font())
 
     def _on_activated(self, index: int) -> None:
         self.chosen.emit(self.itemData(index))

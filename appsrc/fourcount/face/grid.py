@@ -22,6 +22,9 @@ LONGEST_IN_FULL = 7
 
 RIGHT = Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter
 
+ACROSS = (4, 7, 7, 3)
+"""Shares of the width where groups run across: their names stand over the columns."""
+
 
 class Grid(FieldsView):
     """Two groups by two columns, as the paper prints them: groups down or across.
@@ -175,7 +178,7 @@ class Grid(FieldsView):
         else:
             self._place_groups(kind, form)
         self._layout.setRowMinimumHeight(11, self._look.px(8) if form == "pairs" else 0)
-        for column, stretch in enumerate(kind.stretches):
+        for column, stretch in enumerate(kind.stretches if layout == "down" else ACROSS):
             self._layout.setColumnStretch(column, stretch)
         self._set_alignment(layout)
         for widget in self._widgets():

@@ -3,8 +3,8 @@
 from __future__ import annotations
 
 from PySide6.QtCore import Qt, QTimer
-from PySide6.QtGui import QPainter, QPaintEvent
-from PySide6.QtWidgets import QHBoxLayout, QSizePolicy, QWidget
+from PySide6.QtGui import QPainter, QPaintEvent, QResizeEvent
+from PySide6.QtWidgets import QBoxLayout, QHBoxLayout, QSizePolicy, QWidget
 
 from fourcount.face.fields import FieldsView, QuietField
 from fourcount.face.links import Link
@@ -15,6 +15,9 @@ from fourcount.wording import labels
 
 NOTICE_STAYS = 6_000
 """Milliseconds for which a notice stays."""
+
+NARROW = 700
+"""Below this width (at 100% text) title and source stand under each other."""
 
 
 class Hairline(QWidget):
@@ -48,7 +51,8 @@ class Header(FieldsView):
         self._timer.timeout.connect(self._on_notice_over)
         self.notice.setSizePolicy(QSizePolicy.Policy.Ignored, QSizePolicy.Policy.Preferred)
         self.notice.setAlignment(Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter)
-        self._row = QHBoxLayout(self)
+        self._narrow = False
+        self._row = QBoxLayout(QBoxLayout.Direction.LeftToRight, self)
         self._row.addWidget(self.title, 5)
         self._row.addWidget(self.source, 5)
         self._row.addWidget(self.notice, 4)
@@ -59,12 +63,30 @@ class Header(FieldsView):
 
     def tell(self, notice: str) -> None:
         """Show a notice for a while, in room that is kept for it."""
-        self.notice.setText(notice)
-        self.notice.setAccessibleName(notice)
+        self._say(notice)
         self._timer.start()
 
     def _on_notice_over(self) -> None:
-        self.notice.setText("")
+        self._say("")
+
+    def _say(self, notice: str) -> None:
+        self.notice.setText(notice)
+        self.notice.setAccessibleName(notice)
+        self.notice.setVisible(bool(notice) or not self._narrow)
+
+    def resizeEvent(self, event: QResizeEvent) -> None:
+        super().resizeEvent(event)
+        self._fit()
+
+    def _fit(self) -> None:
+        """Title, source and notice side by side, or under each other where the window is narrow."""
+        narrow = self.width() < self._look.px(NARROW)
+        if narrow != self._narrow:
+            self._narrow = narrow
+            ways = QBoxLayout.Direction
+            self._row.setDirection(ways.TopToBottom if narrow else ways.LeftToRight)
+            self._on_look_changed()
+            self._say(self.notice.text())
 
     def show_state(self, record: Record) -> None:
         """Show the paper's own texts."""
@@ -80,7 +102,8 @@ class Header(FieldsView):
     def _on_look_changed(self) -> None:
         px = self._look.px
         self._row.setContentsMargins(px(24), px(5), px(24), px(5))
-        self._row.setSpacing(px(16))
+        self._row.setSpacing(px(2 if self._narrow else 16))
+        self._fit()
 
 
 class Banner(QWidget):

@@ -2,8 +2,6 @@
 
 from __future__ import annotations
 
-from collections.abc import Sequence
-
 from fourcount.appraisal.findings import Gap, OutcomeFindings
 from fourcount.picture.scales import (
     Scale,
@@ -19,6 +17,8 @@ from fourcount.wording.extras import extra_lines
 from fourcount.wording.lines import MeasureLine, measure_lines, told_once
 from fourcount.wording.sentence import p_line
 
+Lines = tuple[MeasureLine, ...]
+
 SCALES = {
     "risk": risk_scale,
     "difference": difference_scale,
@@ -28,25 +28,27 @@ SCALES = {
 }
 
 
-def shown_lines(
-    outcome: Outcome, findings: OutcomeFindings, choices: Choices, *, more: bool
-) -> tuple[MeasureLine, ...]:
-    """The measures, those under the fold where they are asked for, and the p."""
+def shown_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices, *, more: bool) -> tuple[Lines, Lines]:
+    """The measures with the p, and those under the fold where they are asked for."""
     every = measure_lines(outcome, findings, choices)
-    shown = tuple(line for line in every if more or line.group == "main")
-    extras = extra_lines(outcome, findings, choices) if more else ()
+    main = told_once(tuple(line for line in every if line.group == "main"))
     tested = not (isinstance(findings.test, Gap) and findings.test.key == "not-counts")
-    return (*told_once(shown), *((p_line(findings),) if tested else ()), *extras)
+    shown = (*main, *((p_line(findings),) if tested else ()))
+    if not more:
+        return shown, ()
+    under = told_once(tuple(line for line in every if line.group != "main"))
+    return shown, (*under, *extra_lines(outcome, findings, choices))
 
 
-def scales_of(lines: Sequence[MeasureLine]) -> tuple[dict[str, Scale], dict[str, str]]:
-    """One scale for each kind of measure, and the key of the last row of the kind, which names its ends."""
+def scales_of(*parts: Lines) -> tuple[dict[str, Scale], set[str]]:
+    """One scale for each kind of measure, and the keys of the rows that name its ends: its last in each part."""
     scales: dict[str, Scale] = {}
-    last: dict[str, str] = {}
+    last: set[str] = set()
     for kind, maker in SCALES.items():
-        mine = [line for line in lines if line.kind == kind and not line.withheld]
-        values = [v for line in mine for v in (line.estimate_value, line.low, line.high) if v is not None]
-        if values:
-            scales[kind] = maker(values)
-            last[kind] = mine[-1].key
+        mine = [[line for line in part if line.kind == kind and not line.withheld] for part in parts]
+        values = [v for part in mine for line in part for v in (line.estimate_value, line.low, line.high)]
+        known = [v for v in values if v is not None]
+        if known:
+            scales[kind] = maker(known)
+            last |= {part[-1].key for part in mine if part}
     return scales, last

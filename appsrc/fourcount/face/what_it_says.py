@@ -52,6 +52,7 @@ class WhatItSays(QWidget):
         self._working_timer.setSingleShot(True)
         self._working_timer.setInterval(WORKING_PAUSE)
         self._head: ColumnHead | None = None
+        self.more_head: Words | None = None
         self._open = ""
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self._show_more = False
@@ -119,17 +120,19 @@ class WhatItSays(QWidget):
 
         outcome, findings, choices = self._shown
         untyped = lacking(findings) is not None
-        self._show_lines(() if untyped else shown_lines(outcome, findings, choices, more=self._show_more))
+        lines = ((), ()) if untyped else shown_lines(outcome, findings, choices, more=self._show_more)
+        self._show_lines(*lines)
         for widget in (self.more, *self.copies):
             widget.setVisible(not untyped)
         computed = findings.form not in PRINTED_INTERVALS
         self.family.setVisible(computed)
         self.level.setVisible(computed)
 
-    def _show_lines(self, lines: Sequence[MeasureLine]) -> None:
+    def _show_lines(self, main: Sequence[MeasureLine], under: Sequence[MeasureLine]) -> None:
         from fourcount.face.says_lines import scales_of
 
-        scales, last = scales_of(lines)
+        lines = (*main, *under)
+        scales, last = scales_of(tuple(main), tuple(under))
         shown = {line.key for line in lines}
         for key, row in self._rows.items():
             if key not in shown:
@@ -138,13 +141,14 @@ class WhatItSays(QWidget):
             row = self._row(line.key)
             scale = None if line.withheld else scales.get(line.kind)
             axis = None
-            if scale and last[line.kind] == line.key:
+            if scale and line.key in last:
                 from fourcount.wording.axis import axis_words
 
                 axis = axis_words(line.kind, scale.high)
             row.show_line(line, scale, axis, line.key == self._open)
             row.show()
         self._put_in_order([line.key for line in lines])
+        self._show_head_of_more(under[0].key if under else "")
         if self._head and self._shown:
             from fourcount.wording.form import level_of
             from fourcount.wording.limits import interval_name
@@ -175,6 +179,8 @@ class WhatItSays(QWidget):
             return
         self._order = keys
         before: QWidget = self.sentence
+        if self.more_head:
+            self._measures.removeWidget(self.more_head)
         for place, key in enumerate(keys):
             row = self._rows[key]
             self._measures.removeWidget(row)
@@ -182,6 +188,16 @@ class WhatItSays(QWidget):
             QWidget.setTabOrder(before, row)
             before = row
         QWidget.setTabOrder(before, self.family)
+
+    def _show_head_of_more(self, first: str) -> None:
+        """A head over what is seldom needed, so that nobody takes it for the study's main result."""
+        if first:
+            self.more_head = self.more_head or Words(self._look, "head", "muted", labels.LINKS["more"], wraps=False)
+            self.more_head.setContentsMargins(0, self._look.px(20), 0, self._look.px(6))
+            self._measures.removeWidget(self.more_head)
+            self._measures.insertWidget(self._measures.indexOf(self._rows[first]), self.more_head)
+        if self.more_head:
+            self.more_head.setVisible(bool(first))
 
     def _show_working(self) -> None:
         """Put the working under its row; it is computed only while it is open."""

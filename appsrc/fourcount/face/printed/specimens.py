@@ -42,15 +42,16 @@ class SpecimenDelegate(QStyledItemDelegate):
 
     def _width(self, specimen: str, note: str) -> int:
         body, small = QFontMetrics(self._look.font("body")), QFontMetrics(self._look.font("small"))
-        return body.horizontalAdvance(specimen) + small.horizontalAdvance(note) + self._look.px(48)
+        return body.horizontalAdvance(specimen) + small.horizontalAdvance(note) + self._look.px(48 if note else 24)
 
 
 def show_notes(box: QComboBox, look: Look, notes: Mapping[str, str]) -> None:
     """Give each entry of a list its note, and the list the width that both need."""
     if not isinstance(box.itemDelegate(), SpecimenDelegate):
         for index in range(box.count()):
-            note = notes[box.itemData(index)]
+            note = notes.get(box.itemData(index), "")
             box.setItemData(index, note, Qt.ItemDataRole.StatusTipRole)
-            box.setItemData(index, f"{box.itemText(index)}, {note}", Qt.ItemDataRole.AccessibleTextRole)
+            if note:
+                box.setItemData(index, f"{box.itemText(index)}, {note}", Qt.ItemDataRole.AccessibleTextRole)
         box.setItemDelegate(SpecimenDelegate(look, box))
     box.view().setMinimumWidth(max(box.view().sizeHintForColumn(0), box.width()))

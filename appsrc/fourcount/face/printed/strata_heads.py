@@ -49,6 +49,7 @@ class StrataHeads:
         self.fields = (*self.labels.values(), *self.headings.values())
         self._roles = {key: QLabel() for key in ("first", "second", "left", "right")}
         self._repeated = {key: ElidedLabel() for key in ("left", "right", "all")}
+        self._again = {key: QLabel() for key in ("left", "right")}
         self._all_first = QLabel(labels.ALL)
         for place, position in enumerate(("first", "second")):
             layout.addWidget(self.labels[position], 0, 1 + 2 * place, 1, 2)
@@ -57,6 +58,7 @@ class StrataHeads:
             layout.addWidget(self.headings[column], 2, place)
             layout.addWidget(self._roles[column], 3, place)
             layout.addWidget(self._repeated[column], 2, place + 2)
+            layout.addWidget(self._again[column], 3, place + 2)
         layout.addWidget(self._all_first, 2, 2)
         layout.addWidget(self._repeated["all"], 2, 4)
         self._repeated["all"].setText(labels.ALL)
@@ -78,11 +80,14 @@ class StrataHeads:
             field.setPlaceholderText(labels.HINTS[f"{column}_heading{cases}"])
             words = field.text().strip() or field.placeholderText()
             self._repeated[column].setText(words)
+            self._repeated[column].setPalette(self._look.text_palette("ink" if field.text().strip() else "muted"))
         for column in ("left", "right"):
             self._roles[column].setText(labels.ROLES["counted"] if outcome.counted == column else "")
         if of_total and outcome.counted == "right":
             self._roles["left"].setText(labels.ROLES["others"])
             self._roles["right"].setText("")
+        for column, again in self._again.items():
+            again.setText(self._roles[column].text())
         for widget, shown in (
             (self.headings["right"], not of_total),
             (self._repeated["right"], not of_total),
@@ -106,7 +111,7 @@ class StrataHeads:
         for label in self._small():
             label.setFont(self._look.font("small"))
             label.setPalette(self._look.text_palette("muted"))
-            label.setContentsMargins(0, 0, self._look.px(2), 0)
+            label.setContentsMargins(0, 0, 0, 0)
 
     def _small(self) -> tuple[QLabel, ...]:
-        return (*self._roles.values(), *self._repeated.values(), self._all_first)
+        return (*self._roles.values(), *self._repeated.values(), *self._again.values(), self._all_first)
