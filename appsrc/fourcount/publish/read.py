@@ -50,6 +50,7 @@ def read(text: str) -> Json:
         "limits_level": pasted.limits_level,
         "printed": [_figure(figure) for figure in pasted.figures],
         "printed_text": pasted.paper_text,
+        "adjusted_for": pasted.adjusted_for,
         "ambiguous": list(pasted.ambiguous),
     }
 

@@ -10,6 +10,7 @@ from fourcount.record.editing.forms import in_form
 from fourcount.record.editing.texts import storable, typed_texts
 from fourcount.record.outcome import (
     CELLS,
+    PAIRED_DESIGNS,
     PAPER_MEASURES,
     EffectOnly,
     Outcome,
@@ -36,6 +37,8 @@ def take_paste(outcome: Outcome, pasted: Pasted) -> Outcome:
     if brings_another_table(outcome, pasted):
         outcome = Outcome(design=outcome.design, layout=outcome.layout, where=outcome.where)
     formed = in_form(outcome, pasted.form)
+    if pasted.form == "pairs" and formed.design in PAIRED_DESIGNS and _cases_and_controls(pasted):
+        formed = replace(formed, design="matched")
     table = _table(formed.table, pasted)
     words = {
         "first_label_text": pasted.groups[0].label if pasted.groups else "",
@@ -49,6 +52,12 @@ def take_paste(outcome: Outcome, pasted: Pasted) -> Outcome:
     layout: dict[str, Any] = {"layout": pasted.layout} if pasted.source == "block" else {}
     figures = _figures(pasted, counts=pasted.form != "effect-only")
     return replace(formed, table=table, **told, **layout, **figures)
+
+
+def _cases_and_controls(pasted: Pasted) -> bool:
+    """Whether the two sides of pasted pairs are a case and its control."""
+    sides = {group.label.casefold().rstrip("s") for group in pasted.groups}
+    return sides == {"case", "control"}
 
 
 def brings_another_table(outcome: Outcome, pasted: Pasted) -> bool:
@@ -100,4 +109,6 @@ def _figures(pasted: Pasted, *, counts: bool) -> dict[str, Any]:
     taken: dict[str, Any] = {f"{name}_text": text}
     if measures:
         taken[f"{name}_measure"] = measures[0]
+    if pasted.adjusted_for and (apart or not counts):
+        taken["adjusted_for_text"] = storable(pasted.adjusted_for)
     return taken

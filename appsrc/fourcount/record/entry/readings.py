@@ -188,11 +188,11 @@ class Pasted(msgspec.Struct, frozen=True, kw_only=True):
 
     ``form`` is the form of print; ``groups`` are its two rows (several pairs of rows for strata) as cell text.
     ``left_heading`` and ``right_heading`` are headings told by a block; ``words`` says the event in full where a
-    sentence told it; ``unit`` is that of person-time. ``figures`` are printed results beside the counts and
-    ``paper_text`` the piece of text that holds them. ``ambiguous`` lists by key what might be understood otherwise; a
-    window shows what was understood before it is taken where anything is listed. ``limits_level`` is the level printed
-    with limits of risks ("90%"). ``strata_of_total`` says that the right cells of strata are totals. ``source`` is
-    "block" or "sentence".
+    sentence told it; ``unit`` is that of person-time. ``figures`` are printed results beside the counts,
+    ``paper_text`` the piece of text that holds them, and ``adjusted_for`` what an adjusted one was adjusted for.
+    ``ambiguous`` lists by key what might be understood otherwise; a window shows what was understood before it is taken
+    where anything is listed. ``limits_level`` is the level printed with limits of risks ("90%"). ``strata_of_total``
+    says that the right cells of strata are totals. ``source`` is "block" or "sentence".
     """
 
     form: Form
@@ -206,6 +206,7 @@ class Pasted(msgspec.Struct, frozen=True, kw_only=True):
     layout: Layout = "down"
     figures: tuple[PrintedFigure, ...] = ()
     paper_text: str = ""
+    adjusted_for: str = ""
     ambiguous: tuple[str, ...] = ()
     limits_level: str = ""
     strata_of_total: bool = True

@@ -9,6 +9,7 @@ from itertools import pairwise
 import msgspec
 
 from fourcount.record.entry.figure_names import name_at
+from fourcount.record.entry.pasted.adjusted_for import adjusted_for
 from fourcount.record.entry.pasted.doubts import PASTE_DOUBTS
 from fourcount.record.entry.pasted.event_words import event_words, time_span
 from fourcount.record.entry.pasted.labels import Labels, sentence_bounds
@@ -285,6 +286,7 @@ class SentenceReader:
             span=time_span(self.printed, *bounds) or time_span(self.printed, 0, len(self.tokens)),
             figures=self.figures,
             paper_text=self._paper_text(),
+            adjusted_for=adjusted_for(self.printed.shown) if any(each.adjusted for each in self.figures) else "",
             ambiguous=tuple(doubts),
             source="sentence",
         )
@@ -299,6 +301,7 @@ class SentenceReader:
             form="effect-only",
             figures=self.figures,
             paper_text=self._paper_text(),
+            adjusted_for=adjusted_for(self.printed.shown),
             ambiguous=doubts,
             source="sentence",
         )
