@@ -65,10 +65,13 @@ def test_every_copy_of_every_form_carries_its_cautions(name: str) -> None:
         ),
         (
             person_time(),
-            "Usual care: 70 events in 4,090 person-years. Night lights: 38 events in 4,120 person-years.",
+            "Night lights: 38 events in 4,120 person-years. Usual care: 70 events in 4,090 person-years.",
         ),
         (effect_only(adjusted_for_text="age"), "As printed: 0.72 (0.55 to 0.92), adjusted for age."),
-        (strata(), "under 65: usual care 22 of 190, night lights 10 of 200. 65 and over: usual care 48 of 219, night"),
+        (
+            strata(),
+            "under 65: night lights 10 of 200, usual care 22 of 190. 65 and over: night lights 28 of 212, usual",
+        ),
     ],
 )
 def test_a_letter_says_what_it_rests_on(outcome, rests) -> None:

@@ -16,16 +16,16 @@ from fourcount.record.paper import Choices
 LETTER = """\
 Falls · Night lights on a rehabilitation ward · invented example · table 2
 
-Randomised trial. Usual care: 70 fell at least once, 339 did not fall. Night lights: 38 fell at least once, 374 did \
+Randomised trial. Night lights: 38 fell at least once, 374 did not fall. Usual care: 70 fell at least once, 339 did \
 not fall.
 
 Of 100 people with usual care about 17 fell at least once within 12 months; of 100 with night lights about 9. That is \
 8 fewer, and could be as few as 3 or as many as 13 (95% interval).
 
-- Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409
-- Risk with night lights: 9.2% (95% interval 6.8 to 12.4%), 38 of 412
 - Difference: 7.9 fewer per 100 (95% interval 3.3 to 12.6)
 - Number needed to treat for one to benefit (NNTB) 13 (95% interval 8 to 31) over 12 months
+- Risk with usual care: 17.1% (95% interval 13.8 to 21.1%), 70 of 409
+- Risk with night lights: 9.2% (95% interval 6.8 to 12.4%), 38 of 412
 - Risk ratio: 0.54 (95% interval 0.37 to 0.78), relative reduction 46%
 - Odds ratio: 0.49 (95% interval 0.32 to 0.75), as a risk ratio at 12%: 0.52 (0.35 to 0.77)
 - p < 0.001, two-sided (N−1 chi-square). It does not say how large the effect is; the \
@@ -77,9 +77,9 @@ def test_a_letter_says_a_reason_and_a_correction_once() -> None:
     )
     no_events = "Nobody in either group had the event, so this figure is not determined."
     assert figures[:4] == [
-        f"Risk in the reference group: 0.0% (95% interval withheld), 0 of 50. {no_width}",
+        f"Difference: 0.0 per 100 (95% interval withheld). {no_width}",
+        "Risk in the reference group: 0.0% (95% interval withheld), 0 of 50",
         "Risk in the index group: 0.0% (95% interval withheld), 0 of 50",
-        "Difference: 0.0 per 100 (95% interval withheld)",
         f"Risk ratio: not determined (95% interval 0.0202 to 49.4), {added}. {no_events}",
     ]
     zero = letter(outcome_of((0, 50, 7, 43)), Choices(family="textbook"))

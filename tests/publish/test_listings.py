@@ -7,6 +7,7 @@ from hypothesis import given
 from hypothesis import strategies as st
 
 from copies import OUTCOME, on_screen, outcome_of
+from forms import of_total
 from fourcount.publish.listing import WIDTH
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Patient
@@ -49,3 +50,11 @@ def test_a_listing_says_a_caution_once() -> None:
     text = " ".join(on_screen(msgspec.structs.replace(OUTCOME, patient=Patient(starting_risk_text="12%"))).split())
     assert text.count("The interval leaves out that 12% is itself uncertain.") == 1
     assert text.index("is itself uncertain") < text.index("Cautions") < text.index("is assumed to be the same")
+
+
+def test_a_reason_that_withholds_every_interval_is_listed_once() -> None:
+    """Nine times the same sentence is a wall."""
+    text = " ".join(on_screen(of_total(icc_text="1.5", cluster_size_text="21")).split())
+    rows = text[text.index("Difference") : text.index("NNT in the study")]
+    assert rows.count("an intracluster correlation from 0 to 1 is needed") == 1
+    assert "relative reduction 46%" in rows

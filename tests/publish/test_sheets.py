@@ -116,3 +116,10 @@ def test_a_p_has_four_significant_digits(counts: tuple[int, ...], cell: str | No
     assert "e" not in found[1]
     assert 1 <= len(found[1].replace(".", "").lstrip("0")) <= 4
     assert found[4] == "N−1 chi-square"
+
+
+@pytest.mark.parametrize("lead", ["\ufeff", "\u200b", " \u200b", "\u2060\ufeff"])
+def test_a_formula_behind_unseen_signs_is_text(lead: str) -> None:
+    """A program that leaves them out must not find a formula."""
+    for row in table_of(outcome_of((38, 374, 70, 339), label=f"{lead}=1+1")):
+        assert not row[0].lstrip("\ufeff\u200b\u2060 ").startswith("=")

@@ -24,8 +24,16 @@ def cautions_of(outcome, choices=None):
             strata(rows=CONFOUNDED),
             "strata-part",
             (
-                "The difference is 15.0 more per 100 crude and 0.0 per 100 pooled: more than a tenth apart, or on "
-                "different sides of no effect. Confounding by what the strata differ in can do that."
+                "The difference is 15.0 more per 100 crude and 0.0 per 100 within strata: they differ by more than a "
+                "tenth, as confounding by the strata can do."
+            ),
+        ),
+        (
+            strata(rows=(("mild", 10, 200, 30, 300), ("moderate", 15, 100, 12, 50), ("severe", 60, 100, 5, 10))),
+            "strata-part",
+            (
+                "The difference is 8.2 more per 100 crude and 5.0 fewer per 100 within strata: they point in opposite "
+                "directions, as confounding by the strata can do."
             ),
         ),
         (
@@ -33,15 +41,15 @@ def cautions_of(outcome, choices=None):
             "cluster-corrected",
             (
                 "Intervals and p rest on counts divided by the design effect of 1.40 (intracluster correlation 0.02, "
-                "mean size 21); they are as good as that correlation."
+                "mean size 21); they depend on that correlation."
             ),
         ),
         (
             of_total(cluster_size_text="21"),
             "cluster-without-icc",
             (
-                "Whole clusters were assigned, and intervals that take people for independent are too narrow: type the "
-                "intracluster correlation."
+                "Whole clusters were assigned, and intervals that take people for independent are too narrow: an "
+                "intracluster correlation from 0 to 1 is needed."
             ),
         ),
         (

@@ -109,7 +109,7 @@ def test_a_printed_adjusted_effect_stands_apart_in_its_own_digits():
     """With what it was adjusted for; counts cannot give it."""
     line = lines_of(of_total(adjusted_text="0.610 (0.42 to 0.88)", adjusted_for_text="age"))["adjusted"]
     assert (line.name, line.estimate, line.interval) == ("Printed, adjusted odds ratio", "0.610", "0.42 to 0.88")
-    assert line.note == "from the paper’s own model, for age: counts cannot give it, and it is no crude figure"
+    assert line.note == "from the paper’s own model, for age; it cannot be checked from the counts"
 
 
 @pytest.mark.parametrize(

@@ -215,7 +215,7 @@ def test_a_pooled_figure_says_what_it_supposes_and_the_crude_one():
     assert text.startswith("Within strata, the odds that a person")
     assert "it is taken to be the same in all of them" in text
     assert "Crude, without strata, it is 3.00" in text
-    assert "an odds ratio can do it without any confounding" in text
+    assert "parts from the crude one, as an odds ratio can without any confounding" in text
 
 
 @pytest.mark.parametrize(
@@ -256,3 +256,13 @@ def test_an_interval_through_no_effect_is_explained_once(outcome):
     """The headline gives both ends, and the caution what that means."""
     assert "compatible" not in said(outcome)
     assert "through-no-effect" in {caution.key for caution in appraise(outcome, Choices()).cautions}
+
+
+def test_counts_of_people_followed_for_different_times_are_no_risks():
+    """The headline gives the counts and no share of 100 people, as the caution does."""
+    outcome = of_total(follow_up_varied=True)
+    assert said(outcome) == (
+        "70 of 409 people with usual care fell at least once; 38 of 412 with night lights. Follow-up varied, so these "
+        "counts are no risks over 12 months."
+    )
+    assert "no risks." in said(of_total(follow_up_varied=True, span_text=""))

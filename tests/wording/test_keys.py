@@ -232,3 +232,11 @@ def test_several_zeros_are_counted():
 def test_the_standing_block_leaves_nothing_out(block, part):
     """On screen and in exports the same things are said."""
     assert part in block
+
+
+def test_a_mark_of_an_empty_field_begins_with_what_is_wrong():
+    """Nothing was typed there that could be named."""
+    facts = {"text": "", "unit": "person-years"}
+    assert gaps.mark_text(Mark(field="second_right_text", key="units-differ", facts=facts)) == (
+        "The other group’s person-time is in person-years; rates need one unit"
+    )

@@ -163,7 +163,7 @@ def test_where_the_other_outcome_is_counted_the_name_is_not_its_own(outcome_of, 
     outcome = outcome_of(counted="right")
     words = words_of(outcome, findings_of)
     assert (words.key_added, words.key_avoided) == ("gained, on balance", "")
-    assert picture_heading(Record(outcomes=(outcome,)), outcome) == "Other than falls"
+    assert picture_heading(Record(outcomes=(outcome,)), outcome) == "Not “falls”"
 
 
 def test_a_welcome_event_alone_has_to_be_named(outcome_of, findings_of):

@@ -13,8 +13,8 @@ from fourcount.wording.gaps import gap_text
 from fourcount.wording.half_added import half_added
 from fourcount.wording.lines import MeasureLine, measure_lines
 
-ORDER = ("risk_reference", "risk_index", "risk_difference", "number_needed", "risk_ratio", "odds_ratio")
-"""Absolute before relative."""
+ORDER = ("risk_difference", "number_needed", "risk_reference", "risk_index", "risk_ratio", "odds_ratio")
+"""The order of the screen: absolute before relative."""
 
 RISKS: dict[str, names.Group] = {"risk_reference": "reference", "risk_index": "index"}
 

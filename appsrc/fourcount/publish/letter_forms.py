@@ -72,7 +72,7 @@ def rests_on(outcome: Outcome, findings: OutcomeFindings) -> str:
 
 
 def _groups(outcome: Outcome, counts: Counts) -> str:
-    """``usual care 22 of 190, night lights 10 of 200.``"""
+    """``night lights 10 of 200, usual care 22 of 190.``"""
     return (
         ", ".join(
             f"{names.label_within(outcome, group)} {numbers.whole(events)} of {numbers.whole(total)}"

@@ -21,6 +21,8 @@ from fourcount.wording.sentence import headline, p_sentence
 WIDTH = 79
 INDENT = "  "
 LONGEST_NAME = 36
+SENTENCE = ". "
+SHORT = 40  # a fragment such as "relative reduction 46%" belongs to its own line
 TYPED_BESIDE = ("adjusted", "clusters", "losses", "recovered")
 
 
@@ -54,7 +56,7 @@ def _figures(lines: list[MeasureLine], choices: Choices, *, headed: bool = True)
     name = max(len(row[0]) for row in rows if len(row[0]) <= LONGEST_NAME)
     estimate, interval = (max(len(row[column]) for row in rows) for column in (1, 2))
     written = []
-    for row, note in zip(rows, ("", *(line.note for line in lines)), strict=True):
+    for row, note in zip(rows, ("", *_each_once(line.note for line in lines)), strict=True):
         own, below = ("", row[0]) if len(row[0]) > name else (row[0], "")
         figures = f"{own:<{name}}  {row[1]:>{estimate}}  {row[2]:<{interval}}"
         whole = f"{figures}  {row[3]}".rstrip()
@@ -62,6 +64,17 @@ def _figures(lines: list[MeasureLine], choices: Choices, *, headed: bool = True)
         written += [_wrapped(below), whole if fits else figures.rstrip()]
         written += [_wrapped("" if fits else row[3], INDENT), _wrapped(note, INDENT)]
     return "\n".join(line for line in written if line)
+
+
+def _each_once(notes: Iterable[str]) -> tuple[str, ...]:
+    """The notes without the sentences that an earlier one has said: clusters withhold every interval for one reason."""
+    told: set[str] = set()
+    shortened = []
+    for note in notes:
+        sentences = note.split(SENTENCE)
+        shortened.append(SENTENCE.join(s for s in sentences if s.rstrip(".") not in told or len(s) < SHORT))
+        told.update(s.rstrip(".") for s in sentences)
+    return tuple(shortened)
 
 
 def _beside(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import unicodedata
 from datetime import date
 from html import escape
 
@@ -139,4 +140,5 @@ def _patient(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
 def _safe(text: str) -> str:
     """The text on one line, behind an apostrophe where a spreadsheet would take it for more than text."""
     line = one_line(text)
-    return f"'{line}" if line.startswith(_TAKEN_FOR_MORE) else line
+    seen = line.lstrip("".join({sign for sign in line if unicodedata.category(sign) == "Cf"}) + " ")
+    return f"'{line}" if seen.startswith(_TAKEN_FOR_MORE) else line

@@ -162,7 +162,7 @@ TEXTS = {
         "Clusters",
         (
             "Intervals and p rest on counts divided by the design effect of {design_effect} (intracluster correlation "
-            "{icc}, mean size {mean_size}); they are as good as that correlation."
+            "{icc}, mean size {mean_size}); they depend on that correlation."
         ),
     ),
     "cluster-uncorrected": (
@@ -172,8 +172,8 @@ TEXTS = {
     "strata-part": (
         "Crude and pooled part",
         (
-            "The {measure} is {crude} crude and {pooled} pooled: more than a tenth apart, or on different sides of no "
-            "effect. Confounding by what the strata differ in can do that."
+            "The {measure} is {crude} crude and {pooled} within strata: they {apart}, as confounding by the strata can "
+            "do."
         ),
     ),
     "strata-odds-ratio-parts": (

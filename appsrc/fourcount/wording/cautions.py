@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+from collections.abc import Mapping
+
 from fourcount.appraisal.findings import Caution, Fact, Gap
 from fourcount.wording import limits, numbers
 from fourcount.wording.caution_texts import PLAIN_ESTIMATE, TEXTS
@@ -57,6 +59,8 @@ ADJUSTED_FOR = {"adjusted-effect": ", here {what}", "crude-beside-adjusted": " f
 PRINT_UNITS = {"percent": "%", "per-1000": " per 1,000"}
 UNNAMED = {"index": "Index group", "reference": "Reference group"}
 UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
+OPPOSITE = "point in opposite directions"
+A_TENTH = "differ by more than a tenth"
 SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or infinity are shown as they are."
 
 
@@ -105,10 +109,21 @@ def _said(caution: Caution) -> dict[str, str]:
     if caution.key == "crude-beside-adjusted":
         digits = str(facts.get("value", "")).replace("-", numbers.MINUS)
         said["value"] = f"{digits}{PRINT_UNITS.get(str(facts.get('print_unit')), '')}"
+    if "crude" in facts and "pooled" in facts:
+        said["apart"] = OPPOSITE if _opposite(facts) else A_TENTH
     for name in ("crude", "pooled"):
         if name in facts and facts.get("measure") == "risk_difference":
             said[name] = _per_100(facts[name])
     return said
+
+
+def _opposite(facts: Mapping[str, Fact]) -> bool:
+    """Whether crude and pooled lie on different sides of no effect."""
+    none = 0.0 if facts.get("measure") == "risk_difference" else 1.0
+    crude, pooled = facts["crude"], facts["pooled"]
+    if isinstance(crude, str) or isinstance(pooled, str):
+        return False
+    return (crude > none > pooled) or (crude < none < pooled)
 
 
 def _per_100(difference: Fact) -> str:

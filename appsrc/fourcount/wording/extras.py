@@ -78,7 +78,7 @@ FRAGILITY_NOTE = (
 LOST = "{lost} were lost"
 NOT_SAID = "number lost not typed"
 OVERTURNED = "here the interval tells something else about no effect"
-TOO_NARROW = "interval too narrow, as if the lost had been seen"
+TOO_NARROW = "this interval treats guessed outcomes as if seen, so it is too narrow"
 NOT_ONE = "It does not tell whose events those were."
 FRACTION_NOTES = {
     "attributable_exposed": (
@@ -92,13 +92,11 @@ FRACTION_NOTES = {
         "exposed as these were."
     ),
 }
-CLUSTERS_NOTE = (
-    "intervals and p rest on the counts divided by it; the risks stay. It is as good as the correlation that was typed"
-)
+CLUSTERS_NOTE = "intervals and p rest on the counts divided by it; the risks stay. It depends on the correlation typed"
 RECOVERED_NOTE = "standard error {error}{scale}, as if the interval reached equally far to both sides; not from counts"
 FROM_P_NOTE = "standard error {error}{scale}, rebuilt from the printed p, approximate; not from counts"
 LOG_SCALE = " on the log scale"
-ADJUSTED_NOTE = "from the paper’s own model{what}: counts cannot give it, and it is no crude figure"
+ADJUSTED_NOTE = "from the paper’s own model{what}; it cannot be checked from the counts"
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)

@@ -75,6 +75,7 @@ STAND_INS = {
     "icc": "as typed",
     "mean_size": "as typed",
     "crude": "one figure",
+    "apart": "differ",
     "pooled": "another",
     "strata": "several",
     "small": "some",

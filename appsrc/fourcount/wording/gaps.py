@@ -66,7 +66,7 @@ GAP_TEXTS = {
     "follow-up-varied": "People were followed for different times: raw counts give no number needed to treat. "
     "A printed risk at one time does.",
     "cluster-without-icc": "Whole clusters were assigned, and intervals that take people for independent are too "
-    "narrow: type the intracluster correlation.",
+    "narrow: an intracluster correlation from 0 to 1 is needed.",
     "cluster-size-missing": "Type the mean size of a cluster: the intracluster correlation alone does not say "
     "how much the intervals widen.",
     "cluster-no-exact": "Counts divided by a design effect are not whole, and exact methods take whole counts only; "
@@ -150,4 +150,8 @@ def limit_text(gap: Gap) -> str:
 
 def mark_text(mark: Mark | Unreadable) -> str:
     """What was typed, what is wrong with it, and what would do."""
-    return told(MARK_TEXTS.get(mark.key, UNKNOWN_MARK), mark.facts)
+    template = MARK_TEXTS.get(mark.key, UNKNOWN_MARK)
+    if not str(mark.facts.get("text", "-")).strip():
+        said = told(template.removeprefix("{text}: "), mark.facts)
+        return f"{said[:1].upper()}{said[1:]}"
+    return told(template, mark.facts)

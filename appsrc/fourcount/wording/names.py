@@ -105,7 +105,7 @@ def _stand_in(outcome: Outcome, group: Group) -> str:
 def outcome_name(outcome: Outcome) -> str:
     """The outcome's name, which is the left column's; where the right one is counted, it says so."""
     name = event_names.without_unit(outcome.name_text.strip())
-    return name if not name or outcome.counted == "left" else f"Other than {mid_sentence(name)}"
+    return name if not name or outcome.counted == "left" else f"Not “{mid_sentence(name)}”"
 
 
 def event_words(outcome: Outcome) -> str:

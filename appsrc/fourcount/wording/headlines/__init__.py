@@ -5,13 +5,13 @@ Where a form has no risks to speak of, it speaks of odds, of rates, or of what t
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, Rates
+from fourcount.appraisal.findings import Counts, Figure, Gap, OutcomeFindings, Rates
 from fourcount.record.outcome import EffectOnly, Outcome, Pairs, Strata, Table
 from fourcount.record.paper import Choices
 from fourcount.wording import meanings
 from fourcount.wording.form import given, lacking, measure_of, shown_choices
 from fourcount.wording.gaps import gap_text
-from fourcount.wording.headlines.people import people_headline
+from fourcount.wording.headlines.people import counts_headline, people_headline
 from fourcount.wording.headlines.rates import rates_headline
 from fourcount.wording.meanings import pairs, printed, strata
 
@@ -37,6 +37,8 @@ def headline(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
         return _pairs(outcome, findings, shown)
     if outcome.design == "case-control" and "odds_ratio" in findings.measures:
         return _odds(outcome, findings, shown)
+    if outcome.follow_up_varied and isinstance(findings.counts, Counts):
+        return counts_headline(outcome, findings.counts)
     figures = _three(UNPAIRED_KEYS, findings)
     return gap_text(figures) if isinstance(figures, Gap) else people_headline(outcome, figures, shown)
 

@@ -2,13 +2,14 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Figure, Gap, Interval, Range
+from fourcount.appraisal.findings import Counts, Figure, Gap, Interval, Range
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers, of_people
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import DO_NOT_ADD_UP, People, choose, limits_apart
 
+FOLLOW_UP_VARIED = "Follow-up varied, so these counts are no risks{span}."
 PAST_EVERYBODY = "The bare formula’s {level} interval reaches past 100 in 100, so it is not put into people."
 
 
@@ -22,6 +23,16 @@ def people_headline(outcome: Outcome, figures: tuple[Figure, Figure, Figure], ch
     said = (_twice if names.by_time(outcome) else _two_groups)(outcome, people.denominator, counts[0], second)
     rounding = "" if people.add_up else f" {DO_NOT_ADD_UP}"
     return f"{said} {_difference(gap, people, interval, choices)}{rounding}"
+
+
+def counts_headline(outcome: Outcome, counts: Counts) -> str:
+    """The counts alone, where people were followed for different times and the shares are no risks."""
+    event, span = names.event_words(outcome), names.over_span(outcome)
+    reference = f"{numbers.whole(counts.reference_events)} of {numbers.whole(counts.reference_total)} people"
+    index = f"{numbers.whole(counts.index_events)} of {numbers.whole(counts.index_total)}"
+    groups = names.in_group(outcome, "reference"), names.in_group(outcome, "index")
+    said = f"{reference} {groups[0]} {event}; {index} {groups[1]}."
+    return f"{said} {FOLLOW_UP_VARIED.format(span=f' {span}' if span else '')}"
 
 
 def _two_groups(outcome: Outcome, people: int, reference: str, index: str) -> str:

@@ -43,8 +43,8 @@ ORDER = (
 CASE_CONTROL_ORDER = ("pooled_odds_ratio", "odds_ratio", *(key for key in ORDER if not key.endswith("odds_ratio")))
 CRUDE = "{name}, crude"
 POOLED = "{name}, pooled"
-PARTS = "the crude one lies more than a tenth away, or across no effect: confounding can do that"
-ODDS_PART = "an odds ratio can do it without any confounding, so judge by the difference or the risk ratio"
+PARTS = "parts from the crude one"
+ODDS_PART = "as an odds ratio can without any confounding"
 STRATUM_KEY = "stratum."
 
 
@@ -93,7 +93,7 @@ def parting_note(key: str, findings: OutcomeFindings) -> str:
         return ""
     if not {key, key.removeprefix("pooled_")} & set(strata.parting):
         return ""
-    return f"{PARTS}; {ODDS_PART}" if key == "pooled_odds_ratio" else PARTS
+    return f"{PARTS}, {ODDS_PART}" if key == "pooled_odds_ratio" else PARTS
 
 
 def _stratum_line(place: int, stratum: StratumFindings, outcome: Outcome) -> MeasureLine:

@@ -67,7 +67,7 @@ def _rest(key: str, measure: str, figure: Figure, findings: OutcomeFindings) -> 
     parts = (
         f"{WEIGHTED}; {SAME.format(measure=measure)}.",
         crude_text(key, findings),
-        f"{names.sentence_case(note)}." if note else "",
+        f"The pooled figure {note}." if note else "",
         no_interval(figure).strip(),
     )
     return " ".join(part for part in parts if part)

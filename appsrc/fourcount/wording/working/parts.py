@@ -134,12 +134,12 @@ def interval_rows(
     if entry is None:
         return rows
     letters = letter_rows(entry.measure, figure, counts, level)
-    return [*rows, *after_formula(about(entry), letters)]
+    return [*rows, *before_formula(about(entry), letters)]
 
 
-def after_formula(rows: list[Row], letters: list[Row]) -> list[Row]:
-    """The rows about a method with its letters behind its formula."""
-    place = next((i + 1 for i, (label, _) in enumerate(rows) if label == FORMULA), len(rows))
+def before_formula(rows: list[Row], letters: list[Row]) -> list[Row]:
+    """The rows about a method with its letters before its formula: what they are is known when it comes."""
+    place = next((i for i, (label, _) in enumerate(rows) if label == FORMULA), len(rows))
     return [*rows[:place], *letters, *rows[place:]]
 
 
