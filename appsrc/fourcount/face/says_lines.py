@@ -19,6 +19,8 @@ from fourcount.wording.sentence import p_line
 
 Lines = tuple[MeasureLine, ...]
 
+ADJUSTED = "adjusted"
+
 SCALES = {
     "risk": risk_scale,
     "difference": difference_scale,
@@ -29,15 +31,21 @@ SCALES = {
 
 
 def shown_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices, *, more: bool) -> tuple[Lines, Lines]:
-    """The measures with the p, and those under the fold where they are asked for."""
+    """The measures with the p, and those under the fold where they are asked for.
+
+    An adjusted effect was typed, so it stands among the measures whether or not the fold is open.
+    """
     every = measure_lines(outcome, findings, choices)
     main = told_once(tuple(line for line in every if line.group == "main"))
     tested = not (isinstance(findings.test, Gap) and findings.test.key == "not-counts")
-    shown = (*main, *((p_line(findings),) if tested else ()))
+    typed = findings.extras.adjusted is not None
+    extras = extra_lines(outcome, findings, choices) if more or typed else ()
+    adjusted = tuple(line for line in extras if line.key == ADJUSTED)
+    shown = (*main, *adjusted, *((p_line(findings),) if tested else ()))
     if not more:
         return shown, ()
     under = told_once(tuple(line for line in every if line.group != "main"))
-    return shown, (*under, *extra_lines(outcome, findings, choices))
+    return shown, (*under, *(line for line in extras if line.key != ADJUSTED))
 
 
 def scales_of(*parts: Lines) -> tuple[dict[str, Scale], set[str]]:

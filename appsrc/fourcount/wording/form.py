@@ -18,6 +18,7 @@ from fourcount.record.outcome import COUNTED_FORMS
 from fourcount.record.paper import USUAL_LEVEL, Choices
 
 NO_COUNTS = "not-counts"
+SAID_ABOVE = ("recovered", "adjusted")
 
 
 def given(findings: OutcomeFindings) -> Given | Gap:
@@ -50,14 +51,14 @@ def level_of(findings: OutcomeFindings, choices: Choices) -> float:
 def opens_more(findings: OutcomeFindings) -> bool:
     """Whether anything stands under the fold that is not said above it already.
 
-    The p of a printed interval is: it stands there again only with its standard error.
+    The p of a printed interval is, and so is a typed adjusted effect.
     """
     if lacking(findings) is not None:
         return False
     if findings.form in COUNTED_FORMS or isinstance(findings.strata, StrataFindings):
         return True
     extras = findings.extras
-    beside = (field for field in extras.__struct_fields__ if field != "recovered")
+    beside = (field for field in extras.__struct_fields__ if field not in SAID_ABOVE)
     return any(getattr(extras, field) is not None for field in beside)
 
 
