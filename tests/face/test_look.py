@@ -134,3 +134,21 @@ def test_the_cautions_strip_leaves_room_for_the_page(example: Hands) -> None:
     strip.setFocus()
     example.press("Down", times=3)
     assert strip.verticalScrollBar().value() > 0
+
+
+def test_a_narrow_window_keeps_its_room_for_the_table(example: Hands) -> None:
+    """The standing block goes to the end of the page, the strip has cautions alone, the title its own line."""
+    window = example.window
+    standing = window.patient.standing
+    assert not standing.isVisible()
+    assert window.cautions.isVisible()
+    window.resize(480, 700)
+    example.qtbot.waitUntil(standing.isVisible)
+    assert standing.text() in window.cautions.accessibleDescription()
+    assert window.cautions.isVisible() == bool(window.cautions.texts)
+    example.qtbot.waitUntil(lambda: window.header.source.y() > window.header.title.y())
+    window.resize(1280, 700)
+    example.qtbot.waitUntil(lambda: not standing.isVisible())
+    assert window.cautions.isVisible()
+    window.look.set_zoom(2.0)
+    example.qtbot.waitUntil(standing.isVisible)

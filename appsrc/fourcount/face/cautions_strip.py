@@ -22,6 +22,9 @@ SAID_AT_THE_CELL = ("percent-disagrees", "read-as")
 HIGHEST_SHARE = 0.24
 """The largest share of the window's height that the strip takes before it scrolls."""
 
+NARROW = 700
+"""Below this width (at 100% text) the standing block stands at the end of the page, and only cautions in the strip."""
+
 
 class CautionsText(QWidget):
     """The cautions, each behind a bar in the caution's colour, and the standing block under them."""
@@ -61,7 +64,7 @@ class CautionsText(QWidget):
         look, colours = self._look, self._look.palette
         px, margin, y = look.px, look.px(24), float(look.px(11))
         head = labels.COLUMNS["cautions"]
-        beside = width >= px(700)
+        beside = width >= px(NARROW)
         x = margin + max(px(104), text_width(head, look.font("head")) + px(16)) if beside else float(margin)
         if painter:
             draw_text(painter, margin, y + px(1), width, head, look.font("head"), colours.muted)
@@ -73,6 +76,8 @@ class CautionsText(QWidget):
                 painter.fillRect(round(x), round(y), 3, round(tall), look.colour("caution"))
                 draw_text(painter, x + px(13), y, width - x - margin - px(13), text, look.font("body"), colours.ink)
             y += tall + px(5)
+        if not beside:
+            return y + px(6)  # the standing block is at the end of the page
         room = width - x - margin
         y += px(1)
         if painter:
@@ -105,6 +110,11 @@ class CautionsStrip(QScrollArea):
         """The cautions on screen, without the standing block."""
         return self._inside.texts
 
+    @property
+    def narrow(self) -> bool:
+        """Whether only cautions stand here, since the standing block would take too much of a narrow window."""
+        return self.window().width() - self.verticalScrollBar().sizeHint().width() < self._look.px(NARROW)
+
     def show_state(self, findings: OutcomeFindings | None) -> None:
         """Show a line for each caution that holds."""
         texts: tuple[str, ...] = ()
@@ -120,10 +130,12 @@ class CautionsStrip(QScrollArea):
 
     def fit(self) -> None:
         """Take the height that the text needs, up to a share of the window's."""
-        needed = self._inside.heightForWidth(max(self.width() - self.verticalScrollBar().sizeHint().width(), 200)) + 1
+        width = self.window().width() - self.verticalScrollBar().sizeHint().width()
+        needed = self._inside.heightForWidth(max(width, 200)) + 1
         highest = max(int(self.window().height() * HIGHEST_SHARE), self._look.px(56))
         if self.height() != min(needed, highest):
             self.setFixedHeight(min(needed, highest))
+        self.setVisible(bool(self.texts) or not self.narrow)
         self._inside.updateGeometry()
         self._inside.update()
 

@@ -8,6 +8,7 @@ from PySide6.QtGui import QFocusEvent, QFontMetrics, QKeyEvent, QPainter, QPaint
 from fourcount.face.fields import TextField
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
+from fourcount.ink.typeset import bounded
 
 CELL_ROLES: tuple[Role, ...] = ("cell", "total", "body", "small")
 COMPACT_ROLES: tuple[Role, ...] = ("body", "small")
@@ -68,7 +69,7 @@ class CountCell(TextField):
         room = self.width() - self._look.px(left + right + 4)
         for role in COMPACT_ROLES if self._compact else CELL_ROLES:
             font = self._look.font(role)
-            if QFontMetrics(font).horizontalAdvance(self.text()) <= room:
+            if QFontMetrics(font).horizontalAdvance(bounded(self.text())) <= room:
                 break
         if font != self.font():
             self.setFont(font)
@@ -93,7 +94,7 @@ class CountCell(TextField):
 
     def _draw_mark(self, painter: QPainter) -> None:
         """An exclamation mark before the text, or small in the corner where the text leaves no room."""
-        text = self.fontMetrics().horizontalAdvance(self.text())
+        text = self.fontMetrics().horizontalAdvance(bounded(self.text()))
         beside = text + self._look.px(28) < self.width()
         painter.setFont(self._look.font("strong" if beside else "small"))
         place = Qt.AlignmentFlag.AlignVCenter if beside else Qt.AlignmentFlag.AlignTop

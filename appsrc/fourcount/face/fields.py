@@ -22,6 +22,7 @@ from PySide6.QtWidgets import QComboBox, QLineEdit, QMenu, QSizePolicy, QWidget
 from fourcount.face.look import Look
 from fourcount.face.text import tip
 from fourcount.ink.style import Role
+from fourcount.ink.typeset import bounded
 
 LONGEST_TEXT = 10_000_000
 """Far beyond anything that is pasted: Qt's own limit would cut a text in silence."""
@@ -188,7 +189,7 @@ class QuietField(TextField):
         painter = QPainter(self)
         painter.setFont(self.font())
         painter.setPen(self._look.colour("ink"))
-        words = self.fontMetrics().elidedText(self.text(), Qt.TextElideMode.ElideRight, self.width())
+        words = self.fontMetrics().elidedText(bounded(self.text()), Qt.TextElideMode.ElideRight, self.width())
         whole = tip(self.text()) if words != self.text() else ""
         if whole != self.toolTip():
             self.setToolTip(whole)

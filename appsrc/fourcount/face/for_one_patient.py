@@ -16,6 +16,7 @@ from fourcount.face.text import Words
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
+from fourcount.wording.standing import STANDING
 
 if TYPE_CHECKING:
     from PySide6.QtGui import QAction
@@ -101,6 +102,7 @@ class ForOnePatient(FieldsView):
         self.summary = Words(look, "strong", selectable=True)
         self.detail = Words(look, "body", "muted", selectable=True)
         self.copy = Link(look, labels.LINK_WORDS["copy-picture"], actions["copy-picture"])
+        self.standing = Words(look, "small", "muted", STANDING)
         self._build()
         self._connect_all()
 
@@ -163,6 +165,8 @@ class ForOnePatient(FieldsView):
             self._column.addWidget(widget)
         self._column.addLayout(copies)
         self._column.addStretch(1)
+        self._column.addWidget(self.standing)
+        self.standing.hide()
         self.copy.hide()
         self._on_look_changed()
 

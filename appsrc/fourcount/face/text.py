@@ -9,6 +9,7 @@ from PySide6.QtWidgets import QLabel, QSizePolicy
 
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
+from fourcount.ink.typeset import bounded
 
 LONGEST_TIP = 200
 """Characters of a tip; what is typed can be as long as one likes."""
@@ -52,8 +53,9 @@ class Words(QLabel):
 
     def show_words(self, text: str) -> None:
         """Show a text; an empty one takes no room."""
-        if text != self.text():
-            self.setText(text)
+        shown = bounded(text)
+        if shown != self.text():
+            self.setText(shown)
         if not text:
             self.hide()
         elif self.isHidden() and self.parent() is not None:

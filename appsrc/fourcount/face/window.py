@@ -115,7 +115,7 @@ class MainWindow(QMainWindow):
         """All wiring of the window, in one place."""
         for view in (self.header, self.printed, self.patient):
             view.edited.connect(self.session.edit_text)
-            view.edited.connect(self._on_edited)
+            view.edited.connect(self._show_focus)
             view.left.connect(self.session.end_run)
         self.session.changed.connect(self._show_state)
         self._later.arrived.connect(self._on_figures_arrived)
@@ -123,7 +123,7 @@ class MainWindow(QMainWindow):
         self.look.changed.connect(self._on_look_changed)
         application = QApplication.instance()
         if isinstance(application, QApplication):
-            application.focusChanged.connect(self._on_focus_changed)
+            application.focusChanged.connect(self._show_focus)
         self.first_painted.connect(self._on_first_painted)
         self._appearances.triggered.connect(self._on_appearance_chosen)
 
@@ -233,7 +233,11 @@ class MainWindow(QMainWindow):
 
     def resizeEvent(self, event: QResizeEvent) -> None:
         super().resizeEvent(event)
+        self._fit_strip()
+
+    def _fit_strip(self) -> None:
         self.cautions.fit()
+        self.patient.standing.setVisible(self.cautions.narrow)
 
     def closeEvent(self, event: QCloseEvent) -> None:
         if self._has_work() and not dialogs.may_discard(self):
@@ -330,16 +334,11 @@ class MainWindow(QMainWindow):
         self.menuBar().setFont(self.look.font("body"))
         for menu in self.menus.values():
             menu.setFont(self.look.font("body"))
+        self._fit_strip()
         self.update()
         QTimer.singleShot(0, self._show_focus)
 
-    def _on_edited(self, _field: str, _text: str) -> None:
-        self._show_focus()
-
-    def _on_focus_changed(self, _before: QWidget | None, _now: QWidget | None) -> None:
-        self._show_focus()
-
-    def _show_focus(self) -> None:
+    def _show_focus(self, *_: object) -> None:
         """Bring what has the focus into view."""
         focus = self.focusWidget()
         if focus and self.page.isAncestorOf(focus):

@@ -11,6 +11,7 @@ from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.look import Look
 from fourcount.face.printed.quiet_link import QuietLink
 from fourcount.face.text import Words
+from fourcount.ink.typeset import bounded
 from fourcount.record.outcome import EffectOnly, Outcome
 from fourcount.wording import labels
 from fourcount.wording.printed_labels import (
@@ -126,7 +127,7 @@ class OptionalRow(FieldsView):
         for group, words in self._group_names.items():
             role = labels.ROLES["index" if outcome.index_group == group else "reference"]
             for word in words:
-                word.setText(getattr(outcome, f"{group}_label_text").strip() or role)
+                word.setText(bounded(getattr(outcome, f"{group}_label_text").strip() or role))
                 word.setVisible(self._key == "losses")
         self.close_link.setVisible(not holds(self._key, outcome))
 

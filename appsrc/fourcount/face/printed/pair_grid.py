@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
+from fourcount.ink.typeset import bounded
 from fourcount.record.outcome import Outcome
 from fourcount.wording import labels
 from fourcount.wording.printed_labels import PAIR_NAMES, PAIR_NOTES, SIDE_HINTS
@@ -49,7 +50,7 @@ def show_pairs(grid: Grid, outcome: Outcome) -> None:
     for column, head in grid.row_heads.items():
         if column in grid.headings:
             heading = grid.headings[column]
-            head.setText(heading.text().strip() or heading.placeholderText())
+            head.setText(bounded(heading.text().strip() or heading.placeholderText()))
     heading = grid.headings["left"]
     event = heading.text().strip() or heading.placeholderText()
     for field, cell in grid.cells.items():
@@ -57,6 +58,6 @@ def show_pairs(grid: Grid, outcome: Outcome) -> None:
         if name != cell.accessibleName():
             cell.setAccessibleName(name)
     for field, pattern in PAIR_NOTES.items():
-        grid.note(field).setText(pattern.format(**sides))
+        grid.note(field).setText(bounded(pattern.format(**sides)))
     grid.roles["second"].setAlignment(grid.total_heading.alignment())
     grid.total_heading.setText(labels.TOTAL)

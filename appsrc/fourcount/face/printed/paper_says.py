@@ -2,13 +2,14 @@
 
 from __future__ import annotations
 
-from PySide6.QtCore import Qt, Signal
+from PySide6.QtCore import Signal
 from PySide6.QtGui import QResizeEvent
 from PySide6.QtWidgets import QGridLayout, QHBoxLayout
 
 from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.look import Look
 from fourcount.face.text import Words
+from fourcount.ink.typeset import bounded
 from fourcount.record.outcome import Outcome, Position
 from fourcount.wording import labels
 from fourcount.wording.printed_labels import COMPARED_HINTS, COMPARED_WITH, COMPARING, PAPER_MEASURES
@@ -49,8 +50,9 @@ class PaperSays(FieldsView):
         self._rows.setContentsMargins(0, 0, 0, 0)
         self._rows.setColumnStretch(1, 1)
         self._line = QHBoxLayout()
-        self._line.addWidget(self.measure, 0, Qt.AlignmentFlag.AlignLeft)
+        self._line.addWidget(self.measure)
         self._line.addWidget(self.text, 1)
+        self._line.addStretch(0)  # holds the measure at the left where the text stands on its own line
         self._rows.addWidget(self.name, 0, 0)
         self._rows.addLayout(self._line, 0, 1)
         self._rows.addWidget(self.adjusted_name, 2, 0)
@@ -100,7 +102,7 @@ class PaperSays(FieldsView):
         """Put a text that does not fit beside its measure on a line of its own, until it is short again."""
         beside = self.width() - self._rows.columnMinimumWidth(0) - self.measure.sizeHint().width()
         room = beside - self._look.px(24 + 8) - (self._look.px(SLACK) if self._long else 0)
-        long = self.text.fontMetrics().horizontalAdvance(self.text.text()) > room
+        long = self.text.fontMetrics().horizontalAdvance(bounded(self.text.text())) > room
         if long == self._long:
             return
         self._long = long
@@ -108,7 +110,7 @@ class PaperSays(FieldsView):
         if long:
             self._rows.addWidget(self.text, 1, 0, 1, 2)
         else:
-            self._line.addWidget(self.text, 1)
+            self._line.insertWidget(1, self.text, 1)
 
     def _on_look_changed(self) -> None:
         self._rows.setHorizontalSpacing(self._look.px(12))
