@@ -125,8 +125,6 @@ class Strata(msgspec.Struct, frozen=True, kw_only=True, tag="strata"):
 
 
 Table = EventsAndOthers | EventsOfTotal | PercentOfTotal | Pairs | PersonTime | RiskAtTime | EffectOnly | Strata
-CellTable = EventsAndOthers | EventsOfTotal | PercentOfTotal | Pairs | PersonTime | RiskAtTime
-"""The forms whose text stands in four cells."""
 
 Form = Literal[
     "events-and-others",

@@ -6,13 +6,14 @@ import math
 from dataclasses import dataclass
 
 from fourcount.appraisal.check.digits import bounds, rounds_to
-from fourcount.appraisal.check.symmetry import LOG_MEASURES, Triple, symmetric, triple_of
+from fourcount.appraisal.check.symmetry import Triple, symmetric, triple_of
+from fourcount.appraisal.extras.printed import DIFFERENCES, RATIOS
 from fourcount.appraisal.findings.check import Finding
-from fourcount.record.entry.readings import PrintedFigure, PrintedMeasure, PrintedNumber
+from fourcount.record.entry.readings import PrintedFigure, PrintedNumber
 from fourcount.stats.normal import quantile, two_sided_p
 from fourcount.stats.results import Fact
 
-NO_EFFECT_AT_ZERO: frozenset[PrintedMeasure] = frozenset({"risk_difference", "rate_difference", "relative_reduction"})
+NO_EFFECT_AT_ZERO = frozenset((*DIFFERENCES, "relative_reduction"))
 _DECIMALS_OF_ZERO = 2
 _OTHER_TEST = 1.5
 """How many times larger or smaller a p may be than the limits say, since it may come from another test."""
@@ -97,7 +98,7 @@ def _holds_no_effect(figure: PrintedFigure) -> bool | None:
     """Whether no effect lies within the printed limits; None where the digits do not tell."""
     if figure.low is None or figure.high is None:
         return None
-    if figure.measure not in LOG_MEASURES and figure.measure not in NO_EFFECT_AT_ZERO:
+    if figure.measure not in RATIOS and figure.measure not in NO_EFFECT_AT_ZERO:
         return None
     none, low, high = _no_effect(figure), bounds(figure.low), bounds(figure.high)
     if low[1] < none < high[0]:
@@ -106,7 +107,7 @@ def _holds_no_effect(figure: PrintedFigure) -> bool | None:
 
 
 def _no_effect(figure: PrintedFigure) -> int:
-    return 1 if figure.measure in LOG_MEASURES else 0
+    return 1 if figure.measure in RATIOS else 0
 
 
 def _below(figure: PrintedFigure, alpha: float) -> bool | None:

@@ -15,11 +15,11 @@ from fourcount.appraisal.check.candidate import Candidate, Limits, Number, Way, 
 from fourcount.appraisal.check.digits import last_digits, rounds_to, scale_of
 from fourcount.appraisal.findings.check import Fit, Match
 from fourcount.record.entry.readings import PrintedFigure, PrintedNumber
+from fourcount.record.paper import USUAL_LEVEL
 
 OTHER_ANALYSES = ("unpaired_", "crude_", "unclustered_")
 """How the keys of measures begin that are worked out as the form does not ask for."""
 
-USUAL_LEVEL = 0.95
 AS_PRINTED = (0, 0)
 """The rank of a whole fit at the level under the print's own name."""
 LEVELS = (0.95, 0.90, 0.99)

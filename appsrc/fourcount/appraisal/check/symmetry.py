@@ -11,11 +11,10 @@ from dataclasses import dataclass
 from typing import Literal
 
 from fourcount.appraisal.check.digits import bounds, exchanged
-from fourcount.record.entry.readings import PrintedFigure, PrintedMeasure, PrintedNumber
+from fourcount.appraisal.extras.printed import DIFFERENCES, RATIOS
+from fourcount.record.entry.readings import PrintedFigure, PrintedNumber
 
 Part = Literal["estimate", "low", "high"]
-LOG_MEASURES: frozenset[PrintedMeasure] = frozenset({"risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio"})
-PLAIN_MEASURES: frozenset[PrintedMeasure] = frozenset({"risk_difference", "rate_difference"})
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
@@ -30,12 +29,12 @@ class Triple:
 
 def triple_of(figure: PrintedFigure) -> Triple | None:
     """The three numbers where all are printed and finite and the measure has a scale of symmetry; else None."""
-    scaled = figure.measure in LOG_MEASURES or figure.measure in PLAIN_MEASURES
+    scaled = figure.measure in RATIOS or figure.measure in DIFFERENCES
     if not scaled or figure.estimate is None or figure.low is None or figure.high is None:
         return None
     if not all(math.isfinite(part.value) for part in (figure.estimate, figure.low, figure.high)):
         return None
-    return Triple(estimate=figure.estimate, low=figure.low, high=figure.high, log_scale=figure.measure in LOG_MEASURES)
+    return Triple(estimate=figure.estimate, low=figure.low, high=figure.high, log_scale=figure.measure in RATIOS)
 
 
 def ordered(triple: Triple) -> bool:

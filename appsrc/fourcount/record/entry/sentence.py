@@ -31,6 +31,7 @@ from fourcount.record.entry.pasted.vocabulary import (
 from fourcount.record.entry.printed import named_figures
 from fourcount.record.entry.readings import Pasted
 from fourcount.record.entry.tokens import LONGEST_TEXT, Print, as_sentence, take_apart
+from fourcount.record.outcome import PAPER_MEASURES
 
 __all__ = ["PASTE_DOUBTS", "read_sentence"]
 
@@ -38,7 +39,6 @@ _MOST_TOKENS = 1500
 _MOST_NUMBERS = 200
 _MOST_PAIRS = 12
 _NEAR = 12
-_EFFECTS = ("risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference")
 _GROUP_WORDS = GROUP_NOUNS | {"groups", "arms", "placebo", "respectively", "control"}
 
 
@@ -238,7 +238,7 @@ class SentenceReader:
         """Whether anything says that the two are groups of one comparison."""
         between = {token.lower for token in self.tokens[first.after : second.first]}
         around = {token.lower for token in self.tokens[bounds[0] : bounds[1]]}
-        effect = any(figure.measure in (*_EFFECTS, "relative_reduction") for figure in self.figures)
+        effect = any(figure.measure in (*PAPER_MEASURES, "relative_reduction") for figure in self.figures)
         if of_own_total(first) and of_own_total(second):
             nested = first.events and second.total and first.events.whole == second.total.whole
             return not nested and (all(labels) or "respectively" in around)
@@ -293,7 +293,8 @@ class SentenceReader:
 
     def _effect_only(self) -> Pasted | None:
         """Results with limits and without counts ("adjusted hazard ratio, 0.72; 95% CI, 0.55 to 0.92")."""
-        effects = tuple(figure for figure in self.figures if figure.measure in _EFFECTS and figure.low and figure.high)
+        printed = (figure for figure in self.figures if figure.measure in PAPER_MEASURES)
+        effects = tuple(figure for figure in printed if figure.low and figure.high)
         if not effects:
             return None
         doubts = ("counts-left-out",) if self._holds_counts() else ()

@@ -12,8 +12,8 @@ from fourcount.record.entry.pasted.result_text import add_result
 from fourcount.record.entry.printed import read_paper
 from fourcount.record.entry.readings import Pasted
 from fourcount.record.entry.tokens import take_apart
+from fourcount.record.outcome import PAPER_MEASURES
 
-_EFFECTS = ("risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference")
 _LOW = ("lower", "low", "lcl", "lower limit", "lower 95%", "lower ci", "lower bound")
 _HIGH = ("upper", "high", "ucl", "upper limit", "upper 95%", "upper ci", "upper bound")
 
@@ -37,7 +37,7 @@ def effects_alone(matrix: Matrix, lines: Sequence[str]) -> Pasted | None:
     paper = "; ".join((*texts, *lines))
     named = all(name_at(take_apart(text).tokens, 0) or text[:1] in "pP" or _is_adjusted(text) for text in texts)
     figures = read_paper(paper, "risk_ratio").figures
-    told = any(figure.measure in _EFFECTS and figure.low and figure.high for figure in figures)
+    told = any(figure.measure in PAPER_MEASURES and figure.low and figure.high for figure in figures)
     if not (named and told):
         return None
     return Pasted(form="effect-only", figures=figures, paper_text=paper, source="block")
@@ -68,6 +68,6 @@ def only_name(text: str) -> str:
     found: dict[str, str] = {}
     for place in range(len(tokens)):
         name = name_at(tokens, place)
-        if name and name.measure and name.measure in _EFFECTS and not name.vague:
+        if name and name.measure and name.measure in PAPER_MEASURES and not name.vague:
             found.setdefault(name.measure, " ".join(each.text for each in tokens[place : place + name.length]))
     return next(iter(found.values())) if len(found) == 1 else ""
