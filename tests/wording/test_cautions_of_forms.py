@@ -71,7 +71,7 @@ def cautions_of(outcome, choices=None):
         (
             at_time(level="90%"),
             "printed-level",
-            "The intervals keep the print’s own level of 90%; the level of 95% chosen here does not change them.",
+            "The intervals keep the paper’s own level of 90%; the level of 95% chosen here does not change them.",
         ),
         (
             effect_only("risk_ratio", "1.5, p = 0.03"),

@@ -266,3 +266,5 @@ def test_counts_of_people_followed_for_different_times_are_no_risks():
         "counts are no risks over 12 months."
     )
     assert "no risks." in said(of_total(follow_up_varied=True, span_text=""))
+    assert "12 months" not in meaning("risk_index", outcome)
+    assert "12 months" in meaning("risk_index", at_time(follow_up_varied=True))

@@ -129,7 +129,7 @@ def test_a_printed_effect_shows_its_text_and_what_follows_from_it():
     """Standard error, z and p by the formula of Altman and Bland."""
     rows = rows_of("hazard_ratio", effect_only())
     assert rows["As printed"] == "0.72 (0.55 to 0.92)"
-    assert rows["Level"] == "The print says no level; 95% is taken"
+    assert rows["Level"] == "The paper names no level; 95% is taken"
     assert (rows["Standard error"], rows["z"], rows["p"]) == ("0.1312", "−2.50", "0.012")
     assert "Altman and Bland 2011" in rows["Source"]
     assert rows_of("hazard_ratio", effect_only(text="0.72; 90% CI 0.55 to 0.92"))["Level"] == "90%"

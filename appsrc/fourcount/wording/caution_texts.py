@@ -124,8 +124,8 @@ TEXTS = {
         "No limits are printed; the interval is rebuilt from {p}, which is approximate.",
     ),
     "printed-level": (
-        "The level of the print",
-        "The intervals keep the print’s own level of {level}; the level of {chosen} chosen here does not change them.",
+        "The level of the paper",
+        "The intervals keep the paper’s own level of {level}; the level of {chosen} chosen here does not change them.",
     ),
     "concordant-unknown": (
         "Only the pairs that differ",

@@ -52,7 +52,7 @@ GAP_TEXTS = {
     "endless-limit": "A limit is infinite, so no standard error follows from it.",
     "p-out-of-range": "A p lies above 0 and goes up to 1.",
     "estimate-at-no-effect": "The estimate is no effect at all, so no interval can be rebuilt from its p.",
-    "level-not-printed": "The print says no level for its limits, so no other level follows from them.",
+    "level-not-printed": "The paper names no level for its limits, so no other level follows from them.",
     # the design, the table, the patient
     "design-needs-pairs": "In this design people come in pairs, and these counts are not of pairs: "
     "unpaired figures are refused. Choose the form of pairs, and type how many pairs differ.",
@@ -73,7 +73,7 @@ GAP_TEXTS = {
     "the score family gives this figure.",
     "effect-unreadable": "The printed effect cannot be read; “0.54 (0.37 to 0.78)” would do.",
     "effect-not-typed": "Type the printed effect with its limits, such as 0.54 (0.37 to 0.78).",
-    "no-interval-printed": "The print gives neither limits nor an exact p to rebuild them from.",
+    "no-interval-printed": "The paper gives neither limits nor an exact p to rebuild them from.",
     "carried-later": "This figure cannot be carried to one patient.",
     "no-losses": "Nobody is said to be lost; type how many of each group were.",
     "losses-unreadable": "A number lost, or the ratio of risks among the lost, cannot be read.",

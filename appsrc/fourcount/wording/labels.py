@@ -9,7 +9,7 @@ FIELDS = {
     "source_text": "Where the numbers stand",
     "design": "Study",
     "name_text": "Outcome",
-    "other_than": "Other than",
+    "other_than": "Not",
     "left_words_text": "People who",
     "welcome": "Event is welcome or not",
     "span_text": "Time span",

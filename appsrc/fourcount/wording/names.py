@@ -5,7 +5,17 @@ from __future__ import annotations
 from typing import Literal
 
 from fourcount.record.editing import count_other_outcome
-from fourcount.record.outcome import Column, Design, Effect, Outcome, Pairs, Position
+from fourcount.record.outcome import (
+    Column,
+    Design,
+    Effect,
+    EffectOnly,
+    Outcome,
+    Pairs,
+    PersonTime,
+    Position,
+    RiskAtTime,
+)
 from fourcount.wording import event_names
 
 Group = Literal["index", "reference"]
@@ -28,6 +38,9 @@ NAMED_EVENT = "had the event “{heading}”"
 WITHOUT = "did not have the outcome “{outcome}”"
 DID_NOT = "did not"
 VERBS = ("did", "had", "was", "were", "got")  # a heading that begins so is a sentence's words already
+NOT_COUNTED = (Pairs, PersonTime, RiskAtTime, EffectOnly)
+"""Tables whose figures are not shares of people who were followed alike."""
+
 PREPOSITIONS = ("within", "in", "at", "over", "after", "by", "during")
 
 
@@ -171,7 +184,7 @@ def _other_column(outcome: Outcome) -> Column:
 
 def within_span(outcome: Outcome) -> str:
     """The time span after a verb: "within 12 months", or "" where none was typed; a survey has no "within"."""
-    span = bare(outcome.span_text)
+    span = _common_span(outcome)
     if not span or _begins_with_preposition(span):
         return span
     return f"({span})" if outcome.design == "survey" else f"within {span}"
@@ -179,8 +192,18 @@ def within_span(outcome: Outcome) -> str:
 
 def over_span(outcome: Outcome) -> str:
     """The time span under a figure: "over 12 months", or "" where none was typed."""
-    span = bare(outcome.span_text)
+    return over(_common_span(outcome))
+
+
+def over(span: str) -> str:
+    """A time span with its preposition."""
     return span if not span or _begins_with_preposition(span) else f"over {span}"
+
+
+def _common_span(outcome: Outcome) -> str:
+    """The time for which everybody was followed; counts of people followed for different times have none."""
+    varied = outcome.follow_up_varied and not isinstance(outcome.table, NOT_COUNTED)
+    return "" if varied else bare(outcome.span_text)
 
 
 def _begins_with_preposition(span: str) -> bool:

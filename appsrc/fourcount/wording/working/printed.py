@@ -13,7 +13,7 @@ from fourcount.wording.working.parts import ESTIMATE, SPACE, Row, interval_rows,
 from fourcount.wording.working.unpaired import needed_rows, units
 
 AS_PRINTED = "As printed"
-NO_LEVEL = "The print says no level; 95% is taken"
+NO_LEVEL = "The paper names no level; 95% is taken"
 
 
 def timed_rows(measure: str, _outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
