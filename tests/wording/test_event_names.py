@@ -72,6 +72,15 @@ def test_the_reader_s_noun_is_said_of_people(outcome_of):
     assert names.other_words(other) == "had falls"
 
 
+@pytest.mark.parametrize(
+    ("typed", "said"),
+    [("Relapse, n (%)", "had the event “Relapse”"), ("Falls, %", "had falls"), ("relapsed", "relapsed")],
+)
+def test_the_name_of_a_row_typed_as_words_is_no_sentence(outcome_of, typed, said):
+    """A paste may bring it there."""
+    assert names.event_words(outcome_of(left_words_text=typed)) == said
+
+
 def test_an_outcome_is_named_without_its_unit(outcome_of):
     """Above a picture and in a letter."""
     outcome = outcome_of(name_text="Falls, %")

@@ -124,8 +124,9 @@ def outcome_name(outcome: Outcome) -> str:
 def event_words(outcome: Outcome) -> str:
     """The counted event as the reader's sentence says it: "fell at least once"."""
     words, heading = bare(outcome.event_words_text), bare(outcome.event_heading_text)
-    if words:
+    if words and event_names.without_unit(words) == words:
         return event_names.of_people(words) or words
+    heading = words or heading  # words with a unit are the name of a table's row, not a sentence's
     return _headed(heading) if heading else _unnamed_event(outcome)
 
 

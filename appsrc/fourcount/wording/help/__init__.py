@@ -60,6 +60,7 @@ LETTERS = (
     "n2 = c + d, m = a + c, N: everybody. p1 = a/n1, p2 = c/n2; for a single risk x events among n people, p = x/n. "
     "z: the standard normal quantile of the level, 1.96 at 95%. alpha: 1 minus the level. D0, R0 and psi: a "
     "difference, a ratio and an odds ratio on trial; P1 and P2: the likeliest risks of the two groups under it. "
+    "D and R: the estimated difference and ratio. "
     "Of pairs, e have the event on both sides, f on the index side only, g on the reference side only, h on neither, "
     "n = e + f + g + h. Of person-time, x1 events in time t1 in the index group, x2 in t2 in the reference group; for "
     "a single rate x in t. Of strata, Σ adds up what each stratum gives. l and u: the lower and upper limit of a risk."
