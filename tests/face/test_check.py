@@ -118,6 +118,25 @@ def test_a_new_answer_comes_into_view_with_its_field(example: Hands, text: str) 
         return all(top >= 0 and bottom < port.height() for top, bottom in places)
 
     example.qtbot.waitUntil(seen)
+    for part in (view.adopt, *(row.words for row in view.rows)):
+        assert not part.isVisible() or part.height() >= part.heightForWidth(part.width())
+
+
+def test_a_long_result_gets_a_line_of_its_own(example: Hands) -> None:
+    """It is typed on, cursor and all, where it can be seen whole, and goes back beside its measure when it is short."""
+    view = check_of(example)
+    text, measure = view.paper.text, view.paper.measure
+    example.window.resize(1280, 800)
+    example.do("paper")
+    example.type("0.54 (0.37 to 0.78)")
+    assert text.y() == measure.y()
+    example.type(", P = 0.001; OR 0.49 (0.32 to 0.75)")
+    example.qtbot.waitUntil(lambda: text.y() > measure.y())
+    assert example.focus is text
+    assert text.text().endswith("0.75)")
+    example.press("Ctrl+A")
+    example.type("0.5")
+    example.qtbot.waitUntil(lambda: text.y() == measure.y())
 
 
 def test_adopting_takes_family_and_level_in_one_step(example: Hands) -> None:

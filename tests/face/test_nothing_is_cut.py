@@ -89,3 +89,23 @@ def test_nothing_is_cut_in_any_form(open_window: Any, qtbot: Any, form: Form) ->
             window.resize(width, height)
             window.look.set_zoom(zoom)
             qtbot.waitUntil(lambda: cut(window) == [])
+
+
+def test_what_is_wider_than_a_narrow_window_is_reached_sideways(open_window: Any, qtbot: Any) -> None:
+    """Only there a bar moves the page to the side, and the field with the cursor comes into view whole."""
+    outcome = editing.in_form(worked_example().outcomes[0], "pairs")
+    window = open_window(editing.with_outcome(worked_example(), 0, outcome))
+    bar = window.page_scroll.horizontalScrollBar()
+    assert bar.maximum() == 0
+    window.resize(480, 700)
+    window.look.set_zoom(2.0)
+    qtbot.waitUntil(lambda: bar.maximum() > 0)
+    cell = window.printed.grid.cells["first_right_text"]
+    cell.setFocus()
+
+    def seen() -> bool:
+        port = window.page_scroll.viewport()
+        left = cell.mapTo(port, cell.rect().topLeft()).x()
+        return left >= 0 and left + cell.width() <= port.width()
+
+    qtbot.waitUntil(seen)

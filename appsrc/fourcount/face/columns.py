@@ -129,6 +129,13 @@ class PageScroll(QScrollArea):
         self._page = page
         self._wanted: tuple[QWidget, QWidget] | None = None
 
+    def show_whole(self, widget: QWidget) -> None:
+        """Bring a widget into view, sideways as a whole: Qt itself is content with the cursor in it."""
+        self.ensureWidgetVisible(widget)
+        bar, left = self.horizontalScrollBar(), widget.mapTo(self._page, QPoint(0, 0)).x()
+        bar.setValue(max(bar.value(), left + widget.width() + MARGIN - self.viewport().width()))
+        bar.setValue(min(bar.value(), left - MARGIN))
+
     def bring(self, first: QWidget, last: QWidget) -> None:
         """Bring two widgets and all between them into view once they are laid out; the first where both is too much."""
         self._wanted = (first, last)

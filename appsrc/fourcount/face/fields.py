@@ -269,6 +269,8 @@ class ChoiceField(QComboBox):
         if index != self.currentIndex():
             self.setCurrentIndex(index)
             self.updateGeometry()
+        if self._notes and self._notes[str(key)] != self.toolTip():
+            self.setToolTip(self._notes[str(key)])
 
     def show_words(self, words: dict[str, str]) -> None:
         """Give some of the choices other words."""

@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Sequence
 
 from PySide6.QtCore import Qt
-from PySide6.QtGui import QTextBlockFormat, QTextCharFormat, QTextCursor
+from PySide6.QtGui import QIcon, QTextBlockFormat, QTextCharFormat, QTextCursor
 from PySide6.QtWidgets import QDialog, QDialogButtonBox, QTextEdit, QVBoxLayout, QWidget
 
 from fourcount.face.look import Look
@@ -35,6 +35,7 @@ class HelpWindow(QDialog):
         flags = Qt.TextInteractionFlag
         self.text.setTextInteractionFlags(flags.TextSelectableByMouse | flags.TextSelectableByKeyboard)
         buttons = QDialogButtonBox(QDialogButtonBox.StandardButton.Close)
+        buttons.button(QDialogButtonBox.StandardButton.Close).setIcon(QIcon())  # words alone, as everywhere
         buttons.rejected.connect(self.reject)
         layout = QVBoxLayout(self)
         layout.addWidget(self.text)

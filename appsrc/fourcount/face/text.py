@@ -2,8 +2,6 @@
 
 from __future__ import annotations
 
-from html import escape
-
 from PySide6.QtCore import QSize, Qt
 from PySide6.QtWidgets import QLabel, QSizePolicy
 
@@ -18,7 +16,10 @@ LONGEST_TIP = 200
 def tip(text: str) -> str:
     """A text for a tool tip, which Qt would otherwise lay out as a page, with its pictures, where it looks like one."""
     short = text if len(text) <= LONGEST_TIP else f"{text[:LONGEST_TIP]}…"
-    return f"<qt>{escape(short)}</qt>" if "<" in short or "&" in short else short
+    if not any(sign in short for sign in "<&"):
+        return short
+    plain = short.replace("&", "&amp;").replace("<", "&lt;").replace(">", "&gt;")
+    return f"<qt>{plain}</qt>"
 
 
 class Words(QLabel):

@@ -342,4 +342,4 @@ class MainWindow(QMainWindow):
         """Bring what has the focus into view."""
         focus = self.focusWidget()
         if focus and self.page.isAncestorOf(focus):
-            self.page_scroll.ensureWidgetVisible(focus)
+            self.page_scroll.show_whole(focus)
