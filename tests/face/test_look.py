@@ -139,11 +139,13 @@ def test_the_cautions_strip_leaves_room_for_the_page(example: Hands) -> None:
 def test_a_narrow_window_keeps_its_room_for_the_table(example: Hands) -> None:
     """The standing block goes to the end of the page, the strip has cautions alone, the title its own line."""
     window = example.window
-    standing = window.patient.standing
-    assert not standing.isVisible()
+    assert window.patient.standing is None
     assert window.cautions.isVisible()
     window.resize(480, 700)
-    example.qtbot.waitUntil(standing.isVisible)
+    example.qtbot.waitUntil(lambda: window.patient.standing is not None)
+    standing = window.patient.standing
+    assert standing is not None
+    assert standing.isVisible()
     assert standing.text() in window.cautions.accessibleDescription()
     assert window.cautions.isVisible() == bool(window.cautions.texts)
     example.qtbot.waitUntil(lambda: window.header.source.y() > window.header.title.y())

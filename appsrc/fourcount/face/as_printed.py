@@ -65,7 +65,7 @@ class AsPrinted(FieldsView):
         self.layout_choice = ChoiceField(look, labels.FIELDS["layout"], tuple(labels.LAYOUTS.items()))
         self.grid = Grid(look)
         self.notes = Words(look, "small", "caution")
-        self.notice = Words(look, "body", "ink")
+        self.notice: Words | None = None
         self.example = Link(look, labels.FIRST_STEP)
         self.links = [Link(look, labels.LINK_WORDS[key], actions[key], labels.LINK_NAMES.get(key, "")) for key in LINKS]
         self._build()
@@ -138,8 +138,12 @@ class AsPrinted(FieldsView):
 
     def tell(self, notice: str) -> None:
         """Say under the table what became of it."""
-        self.notice.show_words(notice)
-        self.notice.setAccessibleName(notice)
+        if self.notice is None and notice:
+            self.notice = Words(self._look)
+            self._column.insertWidget(self._column.indexOf(self.example), self.notice)
+        if self.notice:
+            self.notice.show_words(notice)
+            self.notice.setAccessibleName(notice)
 
     def field_named(self, key: str) -> TextField | None:
         """The field of this column with a key, its row opened where it has one."""
@@ -204,7 +208,6 @@ class AsPrinted(FieldsView):
         self._column.addWidget(self.grid)
         self._column.addWidget(self.notes)
         self._column.addLayout(links)
-        self._column.addWidget(self.notice)
         self._column.addWidget(self.example)
         self._column.addStretch(1)
         self._on_look_changed()

@@ -122,16 +122,22 @@ class PageScroll(QScrollArea):
         self.setFrameShape(QFrame.Shape.NoFrame)
         self.setWidgetResizable(True)
         self.setVerticalScrollBar(ScrollBar(look))
-        self.setHorizontalScrollBar(ScrollBar(look, Qt.Orientation.Horizontal))
         self.setVerticalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOn)
         self.setFocusPolicy(Qt.FocusPolicy.NoFocus)
         self.setWidget(page)
         self._page = page
+        self._look = look
         self._wanted: tuple[QWidget, QWidget] | None = None
+
+    def take_slim_bar(self) -> None:
+        """Take a bar of our own for the foot, which no first paint needs."""
+        self.setHorizontalScrollBar(ScrollBar(self._look, Qt.Orientation.Horizontal))
 
     def show_whole(self, widget: QWidget) -> None:
         """Bring a widget into view, sideways as a whole: Qt itself is content with the cursor in it."""
         self.ensureWidgetVisible(widget)
+        if self._page.width() <= self.viewport().width():
+            return
         bar, left = self.horizontalScrollBar(), widget.mapTo(self._page, QPoint(0, 0)).x()
         bar.setValue(max(bar.value(), left + widget.width() + MARGIN - self.viewport().width()))
         bar.setValue(min(bar.value(), left - MARGIN))

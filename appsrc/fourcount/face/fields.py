@@ -9,6 +9,7 @@ from PySide6.QtGui import (
     QAction,
     QContextMenuEvent,
     QDropEvent,
+    QEnterEvent,
     QFocusEvent,
     QGuiApplication,
     QKeyEvent,
@@ -269,8 +270,6 @@ class ChoiceField(QComboBox):
         if index != self.currentIndex():
             self.setCurrentIndex(index)
             self.updateGeometry()
-        if self._notes and self._notes[str(key)] != self.toolTip():
-            self.setToolTip(self._notes[str(key)])
 
     def show_words(self, words: dict[str, str]) -> None:
         """Give some of the choices other words."""
@@ -284,6 +283,10 @@ class ChoiceField(QComboBox):
 
         show_notes(self, self._look, self._notes or {})
         super().showPopup()
+
+    def enterEvent(self, event: QEnterEvent) -> None:
+        super().enterEvent(event)
+        self.setToolTip(self._notes[self.currentData()] if self._notes else "")
 
     def wheelEvent(self, event: QEvent) -> None:
         """Leave the wheel to the page: a choice must not change because somebody scrolled over it."""

@@ -102,7 +102,7 @@ class ForOnePatient(FieldsView):
         self.summary = Words(look, "strong", selectable=True)
         self.detail = Words(look, "body", "muted", selectable=True)
         self.copy = Link(look, labels.LINK_WORDS["copy-picture"], actions["copy-picture"])
-        self.standing = Words(look, "small", "muted", STANDING)
+        self.standing: Words | None = None
         self._build()
         self._connect_all()
 
@@ -116,6 +116,14 @@ class ForOnePatient(FieldsView):
             self.baseline.setPlaceholderText("")
             return
         self._show_findings(outcome, findings, record.choices)
+
+    def show_standing(self, shown: bool) -> None:
+        """Show at the end of the page what always holds, where the strip of cautions has no room for it."""
+        if shown and self.standing is None:
+            self.standing = Words(self._look, "small", "muted", STANDING)
+            self._column.addWidget(self.standing)
+        if self.standing:
+            self.standing.setVisible(shown)
 
     def set_bars(self, bars: bool) -> None:
         """Draw a bar pair instead of people, or people again."""
@@ -165,8 +173,6 @@ class ForOnePatient(FieldsView):
             self._column.addWidget(widget)
         self._column.addLayout(copies)
         self._column.addStretch(1)
-        self._column.addWidget(self.standing)
-        self.standing.hide()
         self.copy.hide()
         self._on_look_changed()
 

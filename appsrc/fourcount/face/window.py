@@ -121,6 +121,7 @@ class MainWindow(QMainWindow):
         self._later.arrived.connect(self._on_figures_arrived)
         self._later.loaded.connect(self._on_libraries_loaded)
         self.look.changed.connect(self._on_look_changed)
+        self.look.changed.connect(self._fit_strip)
         application = QApplication.instance()
         if isinstance(application, QApplication):
             application.focusChanged.connect(self._show_focus)
@@ -237,7 +238,7 @@ class MainWindow(QMainWindow):
 
     def _fit_strip(self) -> None:
         self.cautions.fit()
-        self.patient.standing.setVisible(self.cautions.narrow)
+        self.patient.show_standing(self.cautions.narrow)
 
     def closeEvent(self, event: QCloseEvent) -> None:
         if self._has_work() and not dialogs.may_discard(self):
@@ -275,6 +276,7 @@ class MainWindow(QMainWindow):
         from fourcount.face.commands import Commands
         from fourcount.face.cursor_keeper import CursorKeeper
 
+        self.page_scroll.take_slim_bar()
         self.commands = Commands(self.session, self.look, self)
         self.commands.picture = self.patient.picture
         self.cursor_keeper = CursorKeeper(self)
@@ -296,7 +298,8 @@ class MainWindow(QMainWindow):
 
     def _on_told(self, notice: str) -> None:
         self.printed.tell(notice)
-        self.page_scroll.bring(self.printed.notice, self.printed.notice)
+        if self.printed.notice:
+            self.page_scroll.bring(self.printed.notice, self.printed.notice)
 
     def _on_bigger(self) -> None:
         self.look.step_zoom(1)
@@ -334,12 +337,11 @@ class MainWindow(QMainWindow):
         self.menuBar().setFont(self.look.font("body"))
         for menu in self.menus.values():
             menu.setFont(self.look.font("body"))
-        self._fit_strip()
         self.update()
         QTimer.singleShot(0, self._show_focus)
 
     def _show_focus(self, *_: object) -> None:
         """Bring what has the focus into view."""
-        focus = self.focusWidget()
+        focus = self.focusWidget() if self._painted else None  # the first paint shows the top
         if focus and self.page.isAncestorOf(focus):
             self.page_scroll.show_whole(focus)
