@@ -138,6 +138,12 @@ class Hands:
         return printed.isAncestorOf(widget) and not printed.grid.isAncestorOf(widget)
 
     @property
+    def notice(self) -> str:
+        """What is told under the table at this moment."""
+        words = self.window.printed.notice
+        return words.text() if words is not None and words.isVisible() else ""
+
+    @property
     def notes(self) -> list[str]:
         """The sentences about marked cells."""
         words = self.window.printed.notes

@@ -224,17 +224,16 @@ def test_a_form_that_makes_the_study_another_one_says_so(hands: Hands) -> None:
     """Pairs make a trial a paired study, and a matched study makes the form pairs: both are told under the table."""
     printed = hands.window.printed
     hands.do("form-pairs")
-    assert printed.notice.isVisible()
-    assert labels.DESIGNS["paired"] in printed.notice.text()
+    assert labels.DESIGNS["paired"] in hands.notice
     hands.do("first-cell")
     hands.type("1")
-    assert not printed.notice.isVisible()
+    assert not hands.notice
     hands.do("form-events-of-total")
-    assert labels.DESIGNS["trial"] in printed.notice.text()
+    assert labels.DESIGNS["trial"] in hands.notice
     hands.do("form-percent-of-total")
-    assert not printed.notice.isVisible()
+    assert not hands.notice
     hands.choose(printed.design, labels.DESIGNS["matched"])
-    assert labels.FORM_NOTES["pairs"] in printed.notice.text()
+    assert labels.FORM_NOTES["pairs"] in hands.notice
 
 
 @pytest.mark.qt_log_ignore("does not support grabbing the keyboard", extend=True)  # a list, on a screen that is none

@@ -48,7 +48,7 @@ def test_a_sentence_fills_everything_in_one_step(hands: Hands) -> None:
     assert (outcome.first_label_text, outcome.second_label_text) == ("night lights", "usual care")
     assert "0.54" in outcome.paper_text
     assert hands.rows["risk_ratio"].startswith("Risk ratio: 0.54")
-    assert hands.window.printed.notice.text().startswith("Pasted: table, groups")
+    assert hands.notice.startswith("Pasted: table, groups")
     check = hands.window.printed.rare.check
     assert check is not None
     hands.qtbot.waitUntil(lambda: bool(check.sentences))
@@ -208,13 +208,11 @@ def test_the_command_pastes_from_anywhere(hands: Hands) -> None:
     paste(hands, BLOCK, "Ctrl+Shift+V")
     assert hands.texts == ("38", "374", "70", "339")
     paste(hands, "nothing of the kind", "Ctrl+Shift+V")
-    notice = hands.window.printed.notice
-    assert notice.isVisible()
-    assert notice.text() == NO_TABLE_PASTED
+    assert hands.notice == NO_TABLE_PASTED
     paste(hands, "It was 12 in May and 14 in June", "Ctrl+Shift+V")
-    assert notice.text() == COUNTS_NOT_UNDERSTOOD
+    assert hands.notice == COUNTS_NOT_UNDERSTOOD
     paste(hands, DOUBTFUL, "Ctrl+Shift+V")
-    assert not notice.isVisible()
+    assert not hands.notice
     hands.press("Escape")
     hands.do("undo")
     assert hands.texts == ("", "", "", "")
@@ -248,7 +246,7 @@ def test_a_row_pasted_into_strata_fills_its_row(hands: Hands, text: str, label: 
     assert isinstance(table, Strata)
     assert table.strata[2] == Stratum(label_text=label, **dict(zip(CELLS, cells, strict=True)))
     assert table.strata[:2] == before.table.strata[:2]  # type: ignore[union-attr]
-    assert hands.window.printed.notice.isVisible()
+    assert hands.notice
     hands.do("undo")
     assert hands.window.session.outcome == before
 

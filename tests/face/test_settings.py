@@ -91,14 +91,14 @@ def test_an_adopted_method_stays_with_its_paper(
     adopted = window.session.record.choices
     hands.do("new")
     assert window.session.record.choices == Choices(family="exact")
-    assert "exact" in window.printed.notice.text()
+    assert "exact" in hands.notice
     hands.do("undo")
     assert window.session.record.choices == adopted
     assert window.close()
     second = open_window()
     assert second.session.record.choices == Choices(family="exact")
-    assert "exact" in second.printed.notice.text()
     again = at(second)
+    assert "exact" in again.notice
     again.do("example")
     again.do("new")
     assert second.session.record.choices == Choices(family="exact")
