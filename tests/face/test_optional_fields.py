@@ -199,3 +199,11 @@ def test_a_filled_row_is_there_in_every_form(example: Hands) -> None:
     example.type("0.02")
     example.do("form-pairs")
     assert optional.rows["clusters"].isVisible()
+
+
+def test_more_measures_are_offered_where_there_are_any(example: Hands) -> None:
+    """A printed effect in a trial has none beside it; four counts have."""
+    more = example.window.says.more
+    assert more.isVisible()
+    example.do("form-effect-only")
+    assert not more.isVisible()

@@ -116,14 +116,15 @@ class WhatItSays(QWidget):
         if self._shown is None:
             return
         from fourcount.face.says_lines import shown_lines
-        from fourcount.wording.form import lacking
+        from fourcount.wording.form import lacking, opens_more
 
         outcome, findings, choices = self._shown
         untyped = lacking(findings) is not None
         lines = ((), ()) if untyped else shown_lines(outcome, findings, choices, more=self._show_more)
         self._show_lines(*lines)
-        for widget in (self.more, *self.copies):
-            widget.setVisible(not untyped)
+        for link in self.copies:
+            link.setVisible(not untyped)
+        self.more.setVisible(opens_more(findings))
         computed = findings.form not in PRINTED_INTERVALS
         self.family.setVisible(computed)
         self.level.setVisible(computed)

@@ -18,9 +18,9 @@ OFFERED: dict[Form, tuple[str, ...]] = {
     "events-and-others": COUNTED,
     "events-of-total": COUNTED,
     "percent-of-total": COUNTED,
-    "strata": ("counting", "follow-up", "adjusted", "where"),
+    "strata": ("counting", "follow-up", "clusters", "adjusted", "where"),
     "pairs": ("adjusted", "where"),
-    "person-time": ("adjusted", "where"),
+    "person-time": ("counting", "clusters", "adjusted", "where"),
     "risk-at-time": ("adjusted", "where"),
     "effect-only": ("where",),
 }

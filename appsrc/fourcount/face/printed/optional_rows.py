@@ -56,16 +56,19 @@ ROWS: dict[str, Kind] = {
 }
 
 
+EMPTY = Outcome()
+
+
 def holds(key: str, outcome: Outcome) -> bool:
     """Whether a row's fields hold anything but what an empty outcome has."""
     if key == "adjusted" and isinstance(outcome.table, EffectOnly):
         return bool(outcome.adjusted_text.strip())  # what the one effect is adjusted for stands beside it
     if key == "adjusted":
         return bool(outcome.adjusted_text.strip() or outcome.adjusted_for_text.strip())
-    kind, empty = ROWS[key], Outcome()
+    kind = ROWS[key]
     if any(getattr(outcome, text).strip() for text in kind.texts):
         return True
-    return bool(kind.choice) and getattr(outcome, kind.choice) != getattr(empty, kind.choice)
+    return bool(kind.choice) and getattr(outcome, kind.choice) != getattr(EMPTY, kind.choice)
 
 
 class OptionalRow(FieldsView):
