@@ -46,7 +46,7 @@ def test_a_pasted_effect_brings_what_it_was_adjusted_for() -> None:
     "text",
     [
         "\tControls exposed\tControls not exposed\nCases exposed\t27\t29\nCases not exposed\t3\t44",
-        "Of 99 pairs, both case and control were exposed in 9, only the case in 8, only the control in 3, neither in 7",
+        "Of 27 pairs, both case and control were exposed in 9, only the case in 8, only the control in 3, neither in 7",
     ],
 )
 def test_pairs_of_cases_and_controls_are_a_matched_study(text: str) -> None:
