@@ -12,6 +12,7 @@ from fourcount.face.look import Look
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.ink.typeset import draw_text, text_height, text_width
 from fourcount.wording import labels
+from fourcount.wording.standing import STANDING_SHORT
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
@@ -23,7 +24,7 @@ HIGHEST_SHARE = 0.24
 """The largest share of the window's height that the strip takes before it scrolls."""
 
 NARROW = 700
-"""Below this width (at 100% text) the standing block stands at the end of the page, and only cautions in the strip."""
+"""Below this width (at 100% text) the standing block ends the page, and its shortest form stays in the strip."""
 
 
 class CautionsText(QWidget):
@@ -68,8 +69,10 @@ class CautionsText(QWidget):
         x = margin + max(px(104), text_width(head, look.font("head")) + px(16)) if beside else float(margin)
         if painter:
             draw_text(painter, margin, y + px(1), width, head, look.font("head"), colours.muted)
+        room = width - x - margin
         if not beside:
             y += text_height(head, look.font("head"), width) + px(6)
+            y += self._stand(painter, x, y, room, STANDING_SHORT) + px(6)  # first, so that it never scrolls away
         for text in self.texts:
             tall = text_height(text, look.font("body"), width - x - margin - px(13))
             if painter:
@@ -77,12 +80,16 @@ class CautionsText(QWidget):
                 draw_text(painter, x + px(13), y, width - x - margin - px(13), text, look.font("body"), colours.ink)
             y += tall + px(5)
         if not beside:
-            return y + px(6)  # the standing block is at the end of the page
-        room = width - x - margin
+            return y + px(6)
         y += px(1)
+        return y + self._stand(painter, x, y, room, self._standing) + px(11)
+
+    def _stand(self, painter: QPainter | None, x: float, y: float, room: float, text: str) -> float:
+        """What always holds; gives its height."""
+        font = self._look.font("small")
         if painter:
-            draw_text(painter, x, y, room, self._standing, look.font("small"), colours.muted)
-        return y + text_height(self._standing, look.font("small"), room) + px(11)
+            draw_text(painter, x, y, room, text, font, self._look.palette.muted)
+        return text_height(text, font, room)
 
 
 class CautionsStrip(QScrollArea):
@@ -112,7 +119,7 @@ class CautionsStrip(QScrollArea):
 
     @property
     def narrow(self) -> bool:
-        """Whether only cautions stand here, since the standing block would take too much of a narrow window."""
+        """Whether the standing block, which would take too much of a narrow window, ends the page instead."""
         return self.window().width() - self.verticalScrollBar().sizeHint().width() < self._look.px(NARROW)
 
     def show_state(self, findings: OutcomeFindings | None) -> None:
@@ -135,7 +142,6 @@ class CautionsStrip(QScrollArea):
         highest = max(int(self.window().height() * HIGHEST_SHARE), self._look.px(56))
         if self.height() != min(needed, highest):
             self.setFixedHeight(min(needed, highest))
-        self.setVisible(bool(self.texts) or not self.narrow)
         self._inside.updateGeometry()
         self._inside.update()
 

@@ -9,6 +9,11 @@ STANDING = (
 )
 """The short block that is always on screen and on every page."""
 
+STANDING_SHORT = (
+    "Calculates and displays; does not recommend, and does not replace clinical judgement or local guidelines."
+)
+"""What stays on screen where the window is narrow; the short block then ends the page."""
+
 STANDING_FULL = (
     (
         "Fourcount calculates and displays what a study’s numbers imply, for education and for discussion between a "
