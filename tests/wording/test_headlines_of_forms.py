@@ -8,6 +8,7 @@ import pytest
 
 from forms import CONFOUNDED, at_time, effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
+from fourcount.record import editing
 from fourcount.record.outcome import FORMS, Outcome, PercentOfTotal
 from fourcount.record.paper import Choices
 from fourcount.wording.headlines import NOW_THE_OTHER
@@ -268,3 +269,17 @@ def test_counts_of_people_followed_for_different_times_are_no_risks():
     assert "no risks." in said(of_total(follow_up_varied=True, span_text=""))
     assert "12 months" not in meaning("risk_index", outcome)
     assert "12 months" in meaning("risk_index", at_time(follow_up_varied=True))
+
+
+@pytest.mark.parametrize(
+    ("design", "text", "words"),
+    [
+        ("matched", "OR 9.7 (2.9 to 31.7)", "of the pairs: within pairs, the odds that the case was exposed were 9.7"),
+        ("paired", "RD 7% (-5 to 19)", "risk difference of the pairs: per 100 people 7 more"),
+        ("before-after", "RR 1.2 (0.9 to 1.6)", "risk ratio of the pairs: the risk after was 1.2 times that before"),
+    ],
+)
+def test_a_printed_estimate_of_pairs_is_said_to_be_of_pairs(design, text, words):
+    """Without counts of pairs, in the words of the design."""
+    outcome = editing.in_form(editing.with_design(Outcome(), design), "effect-only")
+    assert words in said(editing.edit_text(outcome, "paper_text", text))

@@ -104,7 +104,7 @@ def _is_time(label: str) -> bool:
 
 
 def _by_case(outcome: Outcome) -> bool:
-    return outcome.design == "matched" and isinstance(outcome.table, Pairs)
+    return outcome.design == "matched" and isinstance(outcome.table, (Pairs, EffectOnly))
 
 
 def _stand_in(outcome: Outcome, group: Group) -> str:

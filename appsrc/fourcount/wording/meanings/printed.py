@@ -5,7 +5,7 @@ from __future__ import annotations
 from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PrintedFigure
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import limits, names
+from fourcount.wording import limits, names, pairs
 from fourcount.wording.form import given
 from fourcount.wording.lines.as_printed import effect_texts, risk_texts
 from fourcount.wording.meanings.parts import given_estimate, no_interval, spanned, times
@@ -63,6 +63,9 @@ def _claim(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFindings
     index, reference = names.in_group(outcome, "index"), names.in_group(outcome, "reference")
     if key == "odds_ratio":
         event = spanned(names.event_words(outcome), outcome)
+        if outcome.design == "matched":
+            who, those = pairs.person(outcome, "index"), pairs.those_of(outcome, "reference")
+            return f"within pairs, the odds that {who} {event} were {estimate} times those {those}{interval}"
         return f"the odds that a person {index} {event} were {estimate} times those {reference}{interval}"
     if key == "hazard_ratio":
         return (
