@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import gc
 from collections.abc import Callable, Iterator
 from pathlib import Path
 
@@ -14,6 +15,7 @@ from pytestqt.qtbot import QtBot
 
 from fourcount.face import dialogs
 from fourcount.face.application import make_application, make_window
+from fourcount.face.later import Later
 from fourcount.face.measure_row import MeasureRow
 from fourcount.face.window import MainWindow
 from fourcount.record.outcome import CELLS, Form
@@ -166,9 +168,11 @@ def folder(tmp_path: Path) -> Path:
 def open_window(qtbot: QtBot, folder: Path, monkeypatch: pytest.MonkeyPatch) -> Iterator[Callable[..., MainWindow]]:
     """Open a window and wait until it has painted; it is closed at the end without a question."""
     monkeypatch.setattr(dialogs, "may_discard", lambda parent: True)
+    workers: list[Later] = []
 
     def make(record: Record | None = None) -> MainWindow:
-        window = make_window(folder, record)
+        workers.append(Later())
+        window = make_window(folder, record, workers[-1])
         qtbot.addWidget(window)
         with qtbot.waitSignal(window.first_painted):
             window.show()
@@ -176,6 +180,9 @@ def open_window(qtbot: QtBot, folder: Path, monkeypatch: pytest.MonkeyPatch) -> 
         return window
 
     yield make
+    for worker in workers:
+        assert worker.finish(10.0)
+    gc.enable()  # no worker is left that could collect what is Qt's
     QGuiApplication.styleHints().setColorScheme(Qt.ColorScheme.Unknown)
 
 

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import gc
 from itertools import pairwise
 from typing import TYPE_CHECKING
 
@@ -265,7 +264,7 @@ class MainWindow(QMainWindow):
 
         self.setWindowIcon(QIcon(str(assets_folder() / "fourcount.png")))
         self._take_commands()
-        gc.enable()
+        self.collecting.take_over()
         self.session.wake()
         self.commands.tell_unusual_choices()
         self._later.load()
@@ -273,9 +272,11 @@ class MainWindow(QMainWindow):
     def _take_commands(self) -> None:
         """Make what acts on the record and moves the cursor, which no first paint needs, and wire it."""
         from fourcount.face.checking import Checking
+        from fourcount.face.collecting import Collecting
         from fourcount.face.commands import Commands
         from fourcount.face.cursor_keeper import CursorKeeper
 
+        self.collecting = Collecting(self)
         self.page_scroll.take_slim_bar()
         self.commands = Commands(self.session, self.look, self)
         self.commands.picture = self.patient.picture
