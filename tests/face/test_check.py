@@ -236,3 +236,13 @@ def test_another_record_brings_no_check_of_the_last(example: Hands) -> None:
     assert not check_of(example).isVisible()
     example.type("3")
     assert check_of(example).sentences == []
+
+
+def test_limits_in_the_wrong_order_are_said_once(example: Hands) -> None:
+    """The sentence about the typed text says it, with both numbers; nothing says that the estimate lies outside."""
+    example.do("form-effect-only")
+    example.write(example.window.printed.rare.check.paper.text, "OR 0.49 (0.75 to 0.32)")
+    example.qtbot.waitUntil(lambda: bool(check_of(example).sentences))
+    (only,) = check_of(example).sentences
+    assert "0.75" in only
+    assert "0.32" in only

@@ -40,7 +40,7 @@ TEXTS = {
     "symmetric": "The limits lie evenly round the estimate{scale}, as those of most methods do.",
     "not-symmetric": "Check the limits: they do not lie evenly round the estimate{scale}{mirrored}{slips}. Score, "
     "exact and profile intervals need not.",
-    "limits-disordered": "Check the limits: the estimate does not lie between them.",
+    "limits-disordered": "Check the limits: they are not in order, or the estimate does not lie between them.",
     "percent-none": "Check the percentage: no whole number of {total} gives {printed}; {events} of {total} is {own}.",
     "percent-none-of-total": "Check {text}: no whole number of {total} gives {percent}%; {events} of {total} is "
     "{share}.",

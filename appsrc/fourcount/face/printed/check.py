@@ -98,7 +98,9 @@ class CheckView(FieldsView):
             from fourcount.wording.check import check_lines
             from fourcount.wording.gaps import mark_text
 
-            told = [(_sign(line), line.text) for line in check_lines(check)]
+            marked = any(mark.key.startswith("paper-limits") for mark in check.marks)  # says the same, with its numbers
+            lines = (line for line in check_lines(check) if not (marked and line.key == "limits-disordered"))
+            told = [(_sign(line), line.text) for line in lines]
             marks = {mark.field: mark_text(mark) for mark in check.marks}
         self.paper.text.show_mark(marks.get(self.paper.text.field, ""))
         told += [(TO_CHECK, text) for text in marks.values()]
