@@ -15,7 +15,12 @@ import msgspec
 Design = Literal["trial", "cohort", "survey", "case-control", "matched", "paired", "before-after"]
 Position = Literal["first", "second"]
 Column = Literal["left", "right"]
-Effect = Literal["risk_ratio", "odds_ratio"]
+Effect = Literal["usual", "risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "adjusted"]
+StartKind = Literal["one", "three", "rate", "overall"]
+LineKind = Literal["none", "matters", "margin"]
+LineScale = Literal["risk_difference", "risk_ratio", "odds_ratio", "hazard_ratio"]
+LineSide = Literal["fewer", "more"]
+Certainty = Literal["", "high", "moderate", "low", "very-low"]
 Layout = Literal["down", "across"]
 PaperMeasure = Literal["risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference", "rate_difference"]
 Counting = Literal["people", "events"]
@@ -33,6 +38,20 @@ PAPER_MEASURES: tuple[PaperMeasure, ...] = (
     "risk_difference",
     "rate_difference",
 )
+EFFECTS: tuple[Effect, ...] = (
+    "usual",
+    "risk_ratio",
+    "odds_ratio",
+    "hazard_ratio",
+    "rate_ratio",
+    "risk_difference",
+    "adjusted",
+)
+START_KINDS: tuple[StartKind, ...] = ("one", "three", "rate", "overall")
+LINE_KINDS: tuple[LineKind, ...] = ("none", "matters", "margin")
+LINE_SCALES: tuple[LineScale, ...] = ("risk_difference", "risk_ratio", "odds_ratio", "hazard_ratio")
+LINE_SIDES: tuple[LineSide, ...] = ("fewer", "more")
+CERTAINTIES: tuple[Certainty, ...] = ("", "high", "moderate", "low", "very-low")
 WHERE: tuple[Where, ...] = ("", "abstract", "text", "table", "figure", "supplement")
 CELLS = ("first_left_text", "first_right_text", "second_left_text", "second_right_text")
 
@@ -158,11 +177,27 @@ def form_of(table: Table) -> Form:
 
 
 class Patient(msgspec.Struct, frozen=True, kw_only=True):
-    """Whom the effect is carried to. An empty starting risk means the reference group's own."""
+    """Whom the effect is carried to.
+
+    ``start_kind`` says how the starting risk is given: "one" risk (``starting_risk_text``, maybe with its own limits
+    or as "24 of 200"; empty means the reference group's own), "three" (low, usual and high; the usual one is
+    ``starting_risk_text``), a "rate" (``rate_text``, "12 per 1,000 person-years", over the time span in use), or
+    solved from an "overall" risk and the share of people who have the exposure. The texts of the kinds not chosen stay.
+
+    ``other_span_text`` is a time span other than the study's ("5 years"). ``effect`` "usual" is the risk ratio, outside
+    trials the printed adjusted effect where there is one, else whatever the print gives.
+    """
 
     starting_risk_text: str = ""
     starting_risk_source_text: str = ""
-    effect: Effect = "risk_ratio"
+    effect: Effect = "usual"
+    start_kind: StartKind = "one"
+    low_risk_text: str = ""
+    high_risk_text: str = ""
+    rate_text: str = ""
+    overall_risk_text: str = ""
+    exposed_share_text: str = ""
+    other_span_text: str = ""
 
 
 class Outcome(msgspec.Struct, frozen=True, kw_only=True):
@@ -210,6 +245,14 @@ class Outcome(msgspec.Struct, frozen=True, kw_only=True):
     second_loss_ratio_text: str = ""
     icc_text: str = ""
     cluster_size_text: str = ""
+    line_kind: LineKind = "none"
+    line_scale: LineScale = "risk_difference"
+    line_side: LineSide = "fewer"
+    line_text: str = ""
+    plain_event_text: str = ""
+    plain_other_text: str = ""
+    certainty: Certainty = ""
+    on_handout: bool = True
 
     @property
     def counts_left(self) -> bool:

@@ -30,7 +30,7 @@ from fourcount.appraisal.findings.keys import (
     TIMED_MEASURES,
 )
 from fourcount.appraisal.findings.outcome import Given, OutcomeFindings, Totals
-from fourcount.appraisal.findings.patient import Conversion, PatientFindings
+from fourcount.appraisal.findings.patient import Carriable, CarriedEffect, Conversion, OwnLine, PatientFindings
 from fourcount.appraisal.findings.strata import Homogeneity, Interaction, StrataFindings, StratumFindings
 from fourcount.record.entry.readings import Mark, PrintedFigure
 from fourcount.stats.number_needed import Kind, NumberNeeded, NumberNeededLimit
@@ -38,10 +38,10 @@ from fourcount.stats.results import Counts, Fact, Gap, Interval, PairCounts, Rat
 
 __all__ = [
     "EFFECT_MEASURES", "GAP_KEYS", "MEASURES", "PAIR_MEASURES", "POOLED_MEASURES", "RATE_MEASURES",
-    "TIMED_MEASURES", "AnyNumberNeeded", "Caution", "CheckFindings", "Clusters", "Conversion", "Counts", "EValues",
+    "TIMED_MEASURES", "AnyNumberNeeded", "Carriable", "CarriedEffect", "Caution", "CheckFindings", "Clusters", "Conversion", "Counts", "EValues",
     "Extras", "Fact", "Figure", "FigureCheck", "Finding", "Fit", "Fragility", "Gap", "Given", "Homogeneity",
     "Interaction", "Interval", "Kind", "LossScenario", "Losses", "Mark", "Match", "NumberNeeded",
-    "NumberNeededLimit", "NumberNeededRange", "Orientation", "OutcomeFindings", "PairCounts", "PatientFindings",
+    "NumberNeededLimit", "NumberNeededRange", "Orientation", "OutcomeFindings", "OwnLine", "PairCounts", "PatientFindings",
     "PrintedFigure", "Probability", "Range", "Rates", "Recovered", "StrataFindings", "StratumFindings",
     "TimedRisks", "Totals",
 ]  # fmt: skip

@@ -6,7 +6,7 @@ import msgspec
 
 from fourcount.appraisal.findings.extras import Extras
 from fourcount.appraisal.findings.figures import AnyNumberNeeded, Caution, Figure, Probability
-from fourcount.appraisal.findings.patient import Conversion, PatientFindings
+from fourcount.appraisal.findings.patient import Carriable, Conversion, OwnLine, PatientFindings
 from fourcount.appraisal.findings.strata import StrataFindings
 from fourcount.record.entry.readings import Mark, PrintedFigure
 from fourcount.record.outcome import Form
@@ -40,6 +40,9 @@ class OutcomeFindings(msgspec.Struct, frozen=True, kw_only=True):
     ``form`` is the form of print. ``given`` is what it gives to compute with, a Gap while that is not whole; ``counts``
     is the same for the forms of four counts (and for strata), and for every other form the Gap "not-counts" once
     ``given`` is whole. The keys of ``measures`` are those of the form: ``MEASURES``, ``PAIR_MEASURES`` and so on.
+
+    ``carriable`` lists the effects that can be carried to a patient, the usual one first. ``line`` is the reader's own
+    line, None where none is drawn.
     """
 
     counts: Counts | Gap
@@ -54,3 +57,5 @@ class OutcomeFindings(msgspec.Struct, frozen=True, kw_only=True):
     given: Given | Gap = Gap("not-typed")
     strata: StrataFindings | Gap | None = None
     extras: Extras = Extras()
+    carriable: tuple[Carriable, ...] = ()
+    line: OwnLine | Gap | None = None

@@ -87,7 +87,7 @@ def with_layout(outcome: Outcome, layout: Layout) -> Outcome:
 
 def with_effect(outcome: Outcome, effect: Effect) -> Outcome:
     """Choose the effect that is carried to the patient."""
-    return replace(outcome, patient=replace(outcome.patient, effect=one_of(effect, ("risk_ratio", "odds_ratio"))))
+    return replace(outcome, patient=replace(outcome.patient, effect=one_of(effect, EFFECTS)))
 
 
 def with_counting(outcome: Outcome, counting: Counting) -> Outcome:

@@ -39,6 +39,48 @@ class Proportion(msgspec.Struct, frozen=True, kw_only=True):
     value: float
 
 
+TimeUnit = Literal["day", "week", "month", "year"]
+
+DAYS_IN: dict[TimeUnit, float] = {"day": 1.0, "week": 7.0, "month": 365.25 / 12, "year": 365.25}
+"""Lengths of the units of a time span; a year of 365.25 days is common practice."""
+
+
+class Duration(msgspec.Struct, frozen=True, kw_only=True):
+    """A time span as typed, "12 months" or "5 years"."""
+
+    value: float
+    unit: TimeUnit
+
+    @property
+    def years(self) -> float:
+        """The span in years; months are twelfths of one."""
+        if self.unit == "month":
+            return self.value / 12
+        return self.value * DAYS_IN[self.unit] / DAYS_IN["year"]
+
+
+class RiskReading(msgspec.Struct, frozen=True, kw_only=True):
+    """A risk of other people, with whatever tells how precise it is.
+
+    ``low`` and ``high`` are limits typed with it, at ``level`` (95% where none is said); ``events`` of ``total`` are
+    the counts it was typed as. All of them are None where it is a bare value.
+    """
+
+    value: float
+    low: float | None = None
+    high: float | None = None
+    level: float = 0.95
+    events: int | None = None
+    total: int | None = None
+
+
+class RateReading(msgspec.Struct, frozen=True, kw_only=True):
+    """Events in one person over one unit of time: 12 per 1,000 person-years is 0.012 a year."""
+
+    value: float
+    unit: TimeUnit
+
+
 class Mark(msgspec.Struct, frozen=True, kw_only=True):
     """A field that is marked on screen, why, and whether what it holds is still used."""
 
