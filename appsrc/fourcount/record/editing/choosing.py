@@ -11,6 +11,7 @@ from fourcount.record.editing.texts import one_of
 from fourcount.record.outcome import (
     CELLS,
     DESIGNS,
+    EFFECTS,
     PAIRED_DESIGNS,
     PAPER_MEASURES,
     WHERE,
