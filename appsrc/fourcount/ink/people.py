@@ -10,7 +10,7 @@ from PySide6.QtGui import QColor, QPainter, QPainterPath, QPen
 
 from fourcount.ink.palette import Palette
 
-State = Literal["affected", "avoided", "added", "others"]
+State = Literal["affected", "uncertain", "avoided", "added", "others"]
 STATES: tuple[State, ...] = ("affected", "avoided", "added", "others")
 
 PERSON_FROM = 12.0

@@ -2,18 +2,20 @@
 
 from __future__ import annotations
 
-from typing import NamedTuple
-
 from PySide6.QtCore import QRectF, QSize, Qt
 from PySide6.QtGui import QImage, QPainter
 
 from fourcount.ink.arrays import array_height, draw_array, draw_bar
-from fourcount.ink.people import State, draw_icon
+from fourcount.ink.people import draw_icon
 from fourcount.ink.style import OnPaper, Role, Style
 from fourcount.ink.typeset import RIGHT, draw_text, text_height, text_width
 from fourcount.picture.grid import GRIDS
+from fourcount.picture.options import USUAL, PictureOptions
 from fourcount.picture.plan import Array, Plan
 from fourcount.picture.scales import risk_scale
+from fourcount.wording.picture_words import KeyEntry, PictureWords, Side
+
+__all__ = ["KeyEntry", "Picture", "PictureWords", "Side", "as_image"]
 
 SIDE_BY_SIDE_FROM = 280
 """Below this width (at 100% text) the two groups stand one under the other."""
@@ -22,52 +24,27 @@ GAP = 28
 """Room between two groups side by side, at 100% text."""
 
 
-class Side(NamedTuple):
-    """The captions of one group: its title, the count, the percentage, and the other frame."""
-
-    title: str
-    number: str
-    percent: str
-    other: str
-
-
-class KeyEntry(NamedTuple):
-    """One state of the key and what it means here."""
-
-    state: State
-    text: str
-
-
-class PictureWords(NamedTuple):
-    """All words of a picture. ``note`` says a denominator other than 100, or that the risks are too small to draw.
-
-    ``bar_ends`` are the ends of the scale on which the bars are drawn.
-    """
-
-    without: Side
-    with_: Side
-    key: tuple[KeyEntry, ...]
-    note: str
-    lines: tuple[str, ...]
-    bar_ends: tuple[str, str] = ("", "")
-
-
 class Picture:
     """A plan with its words, laid out for a style. The same drawing serves the window and the copied picture."""
 
-    def __init__(self, plan: Plan, words: PictureWords, bars: bool = False) -> None:
+    def __init__(
+        self, plan: Plan, words: PictureWords, options: PictureOptions | bool = USUAL, bars: bool = False
+    ) -> None:
+        asked = USUAL if isinstance(options, bool) else options
+        as_bars = bars or options is True or plan.denominator is None
         self.plan = plan
         self.words = words
-        self.bars = bars or plan.denominator is None
+        self.options = asked._replace(arrangement="bars") if as_bars else asked
+        self.bars = self.options.arrangement == "bars"
 
     def __eq__(self, other: object) -> bool:
         """Whether both would be drawn alike."""
         if not isinstance(other, Picture):
             return NotImplemented
-        return (self.plan, self.words, self.bars) == (other.plan, other.words, other.bars)
+        return (self.plan, self.words, self.options) == (other.plan, other.words, other.options)
 
     def __hash__(self) -> int:
-        return hash((self.plan, self.words, self.bars))
+        return hash((self.plan, self.words, self.options))
 
     def height(self, style: Style, width: float) -> int:
         """Height of the picture at ``width``, both in logical pixels."""
