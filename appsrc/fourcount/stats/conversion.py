@@ -5,9 +5,10 @@ from __future__ import annotations
 import math
 from typing import Literal
 
+from fourcount.stats.hazards import risk_with_hazard
 from fourcount.stats.results import Gap
 
-Effect = Literal["risk_ratio", "odds_ratio"]
+Effect = Literal["risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference"]
 
 _ROUNDING = 1e-12
 
@@ -26,20 +27,44 @@ def risk_ratio_from_odds_ratio(odds_ratio: float, baseline: float) -> float:
 
 
 def risk_with(effect: Effect, value: float, baseline: float) -> float | Gap:
-    """The risk with the index treatment at a starting risk: P0 RR, or the risk whose odds are OR times those of P0.
+    """The risk with the index treatment at a starting risk, the effect being the same there.
 
-    A risk ratio can ask for more than 100%: a gap, never cut to 100%. 0 times infinity is a gap too: an infinite
-    effect at a starting risk of 0, an odds ratio of 0 at a starting risk of 1. Source: Cochrane Handbook 15.4.4.
+    P0 RR; the risk whose odds are OR times those of P0; 1 - (1 - P0)^HR; P0 + RD. A rate ratio is carried as a hazard
+    ratio is, the rates being constant. A risk ratio or a difference can ask for more than 100% or less than 0: a gap,
+    never cut. 0 times infinity is a gap too: an infinite effect at a starting risk of 0, an odds or hazard ratio of 0
+    at a starting risk of 1. Source: Cochrane Handbook 15.4.4; Altman and Andersen 1999, BMJ 319:1492.
     """
-    if (baseline == 0.0 and math.isinf(value)) or (effect == "odds_ratio" and baseline == 1.0 and value == 0.0):
+    if undetermined(effect, value, baseline):
         return Gap("undetermined-at-baseline")
+    return a_risk(unbounded_risk(effect, value, baseline))
+
+
+def undetermined(effect: Effect, value: float, baseline: float) -> bool:
+    """Whether an effect without end meets nobody, or one of nothing everybody, so that no risk follows."""
+    if baseline == 0.0 and math.isinf(value):
+        return True
+    return effect in ("odds_ratio", "hazard_ratio", "rate_ratio") and baseline == 1.0 and value == 0.0
+
+
+def unbounded_risk(effect: Effect, value: float, baseline: float) -> float:
+    """The same formula's figure whether or not it is a risk; not for what is undetermined."""
+    if effect == "risk_ratio":
+        return value * baseline
+    if effect == "risk_difference":
+        return baseline + value
     if effect == "odds_ratio":
         return _risk_at_odds(value, baseline)
-    risk = value * baseline
-    if risk <= 1.0:
-        return risk
-    # 100% itself can come out a last bit above 1: 11/9 times 9/11 does.
-    return 1.0 if risk <= 1.0 + _ROUNDING else Gap("beyond-one")
+    return risk_with_hazard(baseline, value)
+
+
+def a_risk(figure: float) -> float | Gap:
+    """The figure where it is a risk, else the gap that says which end it passes."""
+    if 0.0 <= figure <= 1.0:
+        return figure
+    # 0 and 100% themselves can come out a last bit beyond: 11/9 times 9/11 does.
+    if figure > 1.0:
+        return 1.0 if figure <= 1.0 + _ROUNDING else Gap("beyond-one")
+    return 0.0 if figure >= -_ROUNDING else Gap("beyond-zero")
 
 
 def _risk_at_odds(odds_ratio: float, baseline: float) -> float:

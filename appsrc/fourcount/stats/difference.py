@@ -121,6 +121,24 @@ def _lower(counts: FractionalCounts, reach: float) -> float:
     return max(difference_of_risks(counts) - reach * reach / u, -1.0)  # only the last bit can lie beyond -1
 
 
+def statistic_at(counts: FractionalCounts, margin: float) -> float:
+    """The square of the statistic under a difference between -1 and the estimate, without the finite factor.
+
+    The multiplier is found at which D - u V is that difference.
+    """
+    away = difference_of_risks(counts) - margin
+
+    def curve(u: float) -> tuple[float, float]:
+        square, slope = _statistic(counts, u)
+        return square / u - away, (slope - square / u) / u
+
+    low, high = 0.0, float(counts.total)
+    while curve(high)[0] < 0.0:
+        low, high = high, 2.0 * high
+    u = increasing_root(curve, low, high, away / variance if (variance := _plain_variance(counts)) else math.inf)
+    return u * away
+
+
 def _first_guess(counts: FractionalCounts, reach: float) -> float:
     """The multiplier if the fitted risks stayed where the estimates are; infinite where both of those are 0 or 1."""
     variance = _plain_variance(counts)

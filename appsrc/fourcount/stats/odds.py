@@ -8,6 +8,7 @@ from fourcount.stats.estimates import without_people
 from fourcount.stats.log_scale import limits_around
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import FractionalCounts, Gap, Interval
+from fourcount.stats.roots import increasing_root
 from fourcount.stats.score import mirrored, multiplier, target
 
 
@@ -84,3 +85,20 @@ def _lower(counts: FractionalCounts, reach: float) -> float:
     start = reach / math.sqrt(n1 / (a * b) + n2 / (c * d)) if b and c else high / 2.0
     u = multiplier(spread, high, reach, start)
     return ((a - u) / (b + u)) * ((d - u) / (c + u))
+
+
+def statistic_at(counts: FractionalCounts, margin: float) -> float:
+    """The square of the statistic under an odds ratio above 0 and below the estimate, without the finite factor.
+
+    The multiplier is found at which (a-u)(d-u) is the odds ratio times (b+u)(c+u).
+    """
+    a, b = counts.index_events, counts.index_non_events
+    c, d = counts.reference_events, counts.reference_non_events
+
+    def curve(u: float) -> tuple[float, float]:
+        slope = a + d - 2.0 * u + margin * (b + c + 2.0 * u)
+        return margin * (b + u) * (c + u) - (a - u) * (d - u), slope
+
+    u = increasing_root(curve, 0.0, min(a, d), min(a, d) / 2.0)
+    n1, n2 = counts.index_total, counts.reference_total
+    return u * u * (n1 / ((a - u) * (b + u)) + n2 / ((c + u) * (d - u)))

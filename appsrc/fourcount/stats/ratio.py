@@ -8,6 +8,7 @@ from fourcount.stats.estimates import without_people
 from fourcount.stats.log_scale import limits_around
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import FractionalCounts, Gap, Interval
+from fourcount.stats.roots import increasing_root
 from fourcount.stats.score import mirrored, multiplier, target
 
 
@@ -102,3 +103,25 @@ def _lower_from_everybody(counts: FractionalCounts, reach: float) -> float:
     n1, n2, m = counts.index_total, counts.reference_total, counts.events
     odds_against = reach * reach / n1 - n1 * counts.reference_non_events / (n2 * m)
     return counts.total / (m * (1.0 + odds_against))
+
+
+def statistic_at(counts: FractionalCounts, margin: float) -> float:
+    """The square of the statistic under a ratio above 0 and below the estimate, without the finite factor.
+
+    The multiplier is found at which (a-u)/(n1-u) is the ratio times (c+u)/(n2+u).
+    """
+    a, b = counts.index_events, counts.index_non_events
+    c, d = counts.reference_events, counts.reference_non_events
+    n1, n2, m = counts.index_total, counts.reference_total, counts.events
+    if b == 0 and margin * m <= counts.total:
+        index_risk = margin * m / counts.total
+        return n1 * (1.0 - index_risk) / index_risk + n1 * n1 * d / (n2 * m)
+
+    def curve(u: float) -> tuple[float, float]:
+        index = (a - u) / (n1 - u) if b else 1.0
+        reference = (c + u) / (n2 + u)
+        slope = (b / ((n1 - u) * (n1 - u))) + margin * d / ((n2 + u) * (n2 + u))
+        return margin * reference - index, slope
+
+    u = increasing_root(curve, 0.0, a, a / 2.0)
+    return u * u * (b / (n1 * (a - u)) + d / (n2 * (c + u)))

@@ -46,6 +46,7 @@ GAP_KEYS = (
     "level-not-printed",  # limits printed at one level give none at another
     "loss-ratio-out-of-range",  # the ratio of the risk among the lost is 0 or more
     "prevalence-out-of-range",  # the share of people exposed lies from 0 to 1
+    "margin-out-of-range",  # a margin's difference lies between -1 and 1, its ratio above 0
 )
 """Every reason for which a function of this folder gives no figure."""
 

@@ -46,6 +46,7 @@ GAP_TEXTS = {
     "ratio-above-one": "The group exposed fared worse, so there is no share of events that the exposure prevents.",
     "no-reference-events": "Nobody in the reference group had the event, where the bare formula has no interval.",
     "prevalence-out-of-range": "The share of people exposed lies from 0% to 100%.",
+    "margin-out-of-range": "A margin’s difference lies between −100% and 100%, and its ratio above 0.",
     "loss-ratio-out-of-range": "The ratio of risks among the lost is a number from 0 upwards.",
     "no-width": "The limits would fall together, and an interval of zero width is withheld.",
     "endless-log": "An estimate or a limit is 0 or infinite, where its logarithm has no end.",
