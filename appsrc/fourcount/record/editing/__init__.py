@@ -14,7 +14,6 @@ from fourcount.record.editing.choosing import (
     with_choices,
     with_counting,
     with_design,
-    with_effect,
     with_family,
     with_follow_up_varied,
     with_layout,
@@ -24,7 +23,23 @@ from fourcount.record.editing.choosing import (
     with_welcome,
     with_where,
 )
+from fourcount.record.editing.for_patient import (
+    with_certainty,
+    with_effect,
+    with_line_kind,
+    with_line_scale,
+    with_line_side,
+    with_on_handout,
+    with_start_kind,
+)
 from fourcount.record.editing.forms import in_form
+from fourcount.record.editing.outcomes import (
+    MOST_OUTCOMES,
+    add_outcome,
+    copy_outcome,
+    move_outcome,
+    remove_outcome,
+)
 from fourcount.record.editing.pasting import brings_another_table, take_paste
 from fourcount.record.editing.stratum_rows import add_stratum, remove_stratum, with_of_total
 from fourcount.record.editing.texts import (
@@ -38,9 +53,11 @@ from fourcount.record.editing.texts import (
 )
 
 __all__ = [
-    "OUTCOME_TEXTS", "PATIENT_TEXTS", "RECORD_TEXTS", "STRATUM_TEXTS", "add_stratum", "brings_another_table",
-    "clear_table", "count_other_outcome", "edit_record_text", "edit_text", "in_form", "remove_stratum", "swap_groups",
-    "take_paste", "typed_texts", "with_adjusted_measure", "with_choices", "with_counting", "with_design",
-    "with_effect", "with_family", "with_follow_up_varied", "with_layout", "with_level", "with_of_total",
-    "with_outcome", "with_paper_measure", "with_welcome", "with_where",
+    "MOST_OUTCOMES", "OUTCOME_TEXTS", "PATIENT_TEXTS", "RECORD_TEXTS", "STRATUM_TEXTS", "add_outcome", "add_stratum",
+    "brings_another_table", "clear_table", "copy_outcome", "count_other_outcome", "edit_record_text", "edit_text",
+    "in_form", "move_outcome", "remove_outcome", "remove_stratum", "swap_groups", "take_paste", "typed_texts",
+    "with_adjusted_measure", "with_certainty", "with_choices", "with_counting", "with_design", "with_effect",
+    "with_family", "with_follow_up_varied", "with_layout", "with_level", "with_line_kind", "with_line_scale",
+    "with_line_side", "with_of_total", "with_on_handout", "with_outcome", "with_paper_measure", "with_start_kind",
+    "with_welcome", "with_where",
 ]  # fmt: skip

@@ -6,24 +6,24 @@ from typing import get_args
 
 from msgspec.structs import replace
 
+from fourcount.record.editing.for_patient import line_turned
 from fourcount.record.editing.forms import in_form
 from fourcount.record.editing.texts import one_of
 from fourcount.record.outcome import (
     CELLS,
     DESIGNS,
-    EFFECTS,
     PAIRED_DESIGNS,
     PAPER_MEASURES,
     WHERE,
     Column,
     Counting,
     Design,
-    Effect,
     EffectOnly,
     Layout,
     Outcome,
     Pairs,
     PaperMeasure,
+    Patient,
     PersonTime,
     Strata,
     Stratum,
@@ -33,26 +33,37 @@ from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choice
 
 
 def swap_groups(outcome: Outcome) -> Outcome:
-    """The other group becomes the index group. What was typed stays where it is."""
-    return replace(outcome, index_group="second" if outcome.index_group == "first" else "first")
+    """The other group becomes the index group. What was typed stays where it is; the own line changes sides."""
+    return replace(line_turned(outcome), index_group="second" if outcome.index_group == "first" else "first")
 
 
 def count_other_outcome(outcome: Outcome) -> Outcome:
-    """The other column is counted. What was typed stays where it is, but for a starting risk.
+    """The other column is counted. What was typed stays where it is, but for risks of the counted outcome.
 
-    That is a risk of the counted outcome: 70% who heal are 30% who do not. So it becomes its complement in the same
-    style of writing; text that gives no risk stays. Counting twice gives an equal risk. Person-time has events and no
-    other outcome, so nothing happens there.
+    70% who heal are 30% who do not. So each starting risk, and an overall one, becomes its complement in the same style
+    of writing, and the low one of three becomes the high one; text that gives no risk stays as it is. The reader's own
+    line changes sides. A rate stays: no rate of the other outcome follows from it. Counting twice gives an equal
+    outcome. Person-time has events and no other outcome, so nothing happens there.
     """
     if isinstance(outcome.table, PersonTime):
         return outcome
     counted: Column = "right" if outcome.counted == "left" else "left"
-    patient = outcome.patient
-    if patient.starting_risk_text:
-        from fourcount.record.entry.complement import complement_text  # the window starts without the readers
+    return replace(line_turned(outcome), counted=counted, patient=_of_the_other(outcome.patient))
 
-        patient = replace(patient, starting_risk_text=complement_text(patient.starting_risk_text))
-    return replace(outcome, counted=counted, patient=patient)
+
+def _of_the_other(patient: Patient) -> Patient:
+    """The patient with the risks of the other outcome."""
+    texts = {
+        "starting_risk_text": patient.starting_risk_text,
+        "low_risk_text": patient.high_risk_text,
+        "high_risk_text": patient.low_risk_text,
+        "overall_risk_text": patient.overall_risk_text,
+    }
+    if not any(texts.values()):
+        return patient
+    from fourcount.record.entry.complement import complement_text  # the window starts without the readers
+
+    return replace(patient, **{field: complement_text(text) if text else "" for field, text in texts.items()})
 
 
 def clear_table(outcome: Outcome) -> Outcome:
@@ -84,11 +95,6 @@ def with_welcome(outcome: Outcome, welcome: bool) -> Outcome:
 
 def with_layout(outcome: Outcome, layout: Layout) -> Outcome:
     return replace(outcome, layout=one_of(layout, ("down", "across")))
-
-
-def with_effect(outcome: Outcome, effect: Effect) -> Outcome:
-    """Choose the effect that is carried to the patient."""
-    return replace(outcome, patient=replace(outcome.patient, effect=one_of(effect, EFFECTS)))
 
 
 def with_counting(outcome: Outcome, counting: Counting) -> Outcome:
