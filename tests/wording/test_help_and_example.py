@@ -7,7 +7,9 @@ import sys
 
 import pytest
 
+from fourcount.stats.entries.carrying import CARRYING
 from fourcount.stats.entries.extras import EXTRAS
+from fourcount.stats.entries.margins import MARGINS
 from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
 from fourcount.stats.entries.recovery import RECOVERIES
 from fourcount.stats.methods import (
@@ -35,7 +37,8 @@ from fourcount.wording.help import (
 from fourcount.wording.labels import FORMS
 
 ALL_METHODS = (*METHODS, *PAIR_METHODS, *RATE_METHODS, *STRATA_METHODS, *TIMED_METHODS)
-SHOWN = (*ALL_METHODS, *TESTS, *PAIR_TESTS, *RATE_TESTS, *STRATA_TESTS, *HOMOGENEITY_TESTS, *EXTRAS, *RECOVERIES)
+CALCULATIONS = (*EXTRAS, *CARRYING, *MARGINS, *RECOVERIES)
+SHOWN = (*ALL_METHODS, *TESTS, *PAIR_TESTS, *RATE_TESTS, *STRATA_TESTS, *HOMOGENEITY_TESTS, *CALCULATIONS)
 LIGHT = ("cautions", "facts", "gaps", "names", "numbers")
 OTHERS = (
     "basis", "carried", "example", "extras", "form", "headlines", "p_value", "pairs", "person_time", "printed",

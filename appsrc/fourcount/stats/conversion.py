@@ -64,7 +64,7 @@ def a_risk(figure: float) -> float | Gap:
     # 0 and 100% themselves can come out a last bit beyond: 11/9 times 9/11 does.
     if figure > 1.0:
         return 1.0 if figure <= 1.0 + _ROUNDING else Gap("beyond-one")
-    return 0.0 if figure >= -_ROUNDING else Gap("beyond-zero")
+    return 0.0 if figure >= -_ROUNDING else Gap("carried-beyond-zero")
 
 
 def _risk_at_odds(odds_ratio: float, baseline: float) -> float:

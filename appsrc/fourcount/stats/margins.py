@@ -64,9 +64,10 @@ def margin_p_from_interval(
         return Gap("endless-limit")
     if limit == estimate:
         return Gap("no-width")
-    away = (
-        math.log(margin / estimate) / math.log(limit / estimate) if scale == "log" else _share(estimate, limit, margin)
-    )
+    if scale == "log":
+        away = math.log(margin / estimate) / math.log(limit / estimate)
+    else:
+        away = (margin - estimate) / (limit - estimate)
     return _tail(quantile(level) * away, short=above == (side == "more"))
 
 

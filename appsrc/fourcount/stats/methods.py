@@ -11,9 +11,11 @@ when they are first called.
 from __future__ import annotations
 
 from fourcount.stats.entries.association_tests import ASSOCIATION_TESTS
+from fourcount.stats.entries.carrying import CARRYING
 from fourcount.stats.entries.comparisons import DIFFERENCE_METHODS, RATIO_METHODS
 from fourcount.stats.entries.entry import Family, HomogeneityEntry, Measure, Method, PairFamily, RateFamily, Test
 from fourcount.stats.entries.extras import EXTRAS
+from fourcount.stats.entries.margins import MARGINS
 from fourcount.stats.entries.odds_ratios import ODDS_RATIO_METHODS
 from fourcount.stats.entries.pairs import PAIR_METHODS, PAIR_TESTS
 from fourcount.stats.entries.rates import RATE_METHODS, RATE_TESTS
@@ -24,9 +26,11 @@ from fourcount.stats.entries.timed import TIMED_METHODS
 from fourcount.stats.results import Counts
 
 __all__ = [
+    "CARRYING",
     "EXTRAS",
     "FAMILIES",
     "HOMOGENEITY_TESTS",
+    "MARGINS",
     "METHODS",
     "PAIR_FAMILIES",
     "PAIR_METHODS",

@@ -8,7 +8,7 @@ from __future__ import annotations
 
 import math
 
-from fourcount.stats.conversion import Effect, a_risk, undetermined, unbounded_risk
+from fourcount.stats.conversion import Effect, a_risk, unbounded_risk, undetermined
 from fourcount.stats.results import Gap
 from fourcount.stats.roots import increasing_root
 

@@ -17,7 +17,7 @@ from collections.abc import Callable
 from dataclasses import dataclass
 from typing import NamedTuple
 
-from fourcount.stats.conversion import Effect, a_risk, risk_ratio_from_odds_ratio, undetermined, unbounded_risk
+from fourcount.stats.conversion import Effect, a_risk, risk_ratio_from_odds_ratio, unbounded_risk, undetermined
 from fourcount.stats.hazards import over_spans
 from fourcount.stats.normal import quantile
 from fourcount.stats.results import Gap, Interval

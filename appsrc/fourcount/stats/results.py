@@ -20,6 +20,7 @@ GAP_KEYS = (
     "beyond-one",  # a risk would pass 100%
     "undetermined-at-baseline",  # an infinite effect at a starting risk of 0, or an odds ratio of 0 at a risk of 1
     "beyond-zero",  # a risk would fall below 0
+    "carried-beyond-zero",  # a difference kept constant would take a risk below 0
     "no-discordant-pairs",  # all pairs agree: the odds ratio of pairs is 0/0
     "concordant-pairs-unknown",  # only the discordant pairs are known: no risk of either side follows
     "empty-pairs",  # there is no pair

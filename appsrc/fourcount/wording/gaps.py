@@ -24,6 +24,7 @@ GAP_TEXTS = {
     "one-outcome": "Nobody, or everybody, here had the event, where textbook odds have no interval; "
     "the score family gives one.",
     "beyond-one": "The risk would pass 100% here; where a risk ratio is carried, the odds ratio can be.",
+    "carried-beyond-zero": "The risk would fall below 0% here; where a difference is carried, the odds ratio can be.",
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     "no-discordant-pairs": "All pairs agree, so their odds ratio is not determined: only pairs that differ tell.",
     "concordant-pairs-unknown": "Only the pairs that differ were typed: without those that agree no risk follows.",

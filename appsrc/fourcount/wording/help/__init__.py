@@ -4,8 +4,10 @@ from __future__ import annotations
 
 from collections.abc import Sequence
 
+from fourcount.stats.entries.carrying import CARRYING
 from fourcount.stats.entries.entry import Calculation, HomogeneityEntry
 from fourcount.stats.entries.extras import EXTRAS
+from fourcount.stats.entries.margins import MARGINS
 from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
 from fourcount.stats.entries.recovery import RECOVERIES
 from fourcount.stats.methods import (
@@ -52,6 +54,8 @@ RATE_TESTS_HEADING = "Tests of equal rates"
 STRATA_TESTS_HEADING = "Tests of no association within strata"
 HOMOGENEITY_HEADING = "Tests of one odds ratio for all strata"
 EXTRAS_HEADING = "Beside the measures"
+CARRYING_HEADING = "For one patient"
+MARGINS_HEADING = "A margin of your own"
 PRINT_ONLY_HEADING = "Recognised in what a paper prints, and not given here"
 PRINT_HEADING = "From printed results"
 
@@ -63,7 +67,9 @@ LETTERS = (
     "D and R: the estimated difference and ratio. "
     "Of pairs, e have the event on both sides, f on the index side only, g on the reference side only, h on neither, "
     "n = e + f + g + h. Of person-time, x1 events in time t1 in the index group, x2 in t2 in the reference group; for "
-    "a single rate x in t. Of strata, Σ adds up what each stratum gives. l and u: the lower and upper limit of a risk."
+    "a single rate x in t. Of strata, Σ adds up what each stratum gives. l and u: the lower and upper limit of a risk. "
+    "For one patient: q the starting risk, O, R and h the odds, risk and hazard ratio, s the share of people exposed, "
+    "P their overall risk. M: a margin."
 )
 
 
@@ -98,6 +104,8 @@ def methods_and_sources() -> tuple[Section, ...]:
         (STRATA_TESTS_HEADING, _entries(STRATA_TESTS)),
         (HOMOGENEITY_HEADING, _entries(HOMOGENEITY_TESTS)),
         (EXTRAS_HEADING, _entries(EXTRAS)),
+        (CARRYING_HEADING, _entries(CARRYING)),
+        (MARGINS_HEADING, _entries(MARGINS)),
         (PRINT_HEADING, _entries(RECOVERIES)),
         (PRINT_ONLY_HEADING, tuple(map(_named, PRINT_METHODS)) + _entries(PRINT_TESTS)),
     )
