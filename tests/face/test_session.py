@@ -2,6 +2,9 @@
 
 from __future__ import annotations
 
+from collections.abc import Callable
+
+import msgspec
 import pytest
 from pytestqt.qtbot import QtBot
 
@@ -9,7 +12,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Counts
 from fourcount.face.session import Session
 from fourcount.record import editing
-from fourcount.record.outcome import CELLS
+from fourcount.record.outcome import CELLS, Outcome
 from fourcount.record.paper import Record
 
 
@@ -72,6 +75,7 @@ def test_each_keystroke_tells_the_record_and_its_findings(session: Session, hear
 def test_findings_are_those_of_the_outcome(session: Session) -> None:
     """Nothing is computed here that appraising the outcome would not give."""
     typed(session, "38", "374", "70", "339")
+    session.settle()
     assert session.findings == appraise(session.outcome, session.record.choices)
 
 
@@ -186,3 +190,145 @@ def test_a_long_past_is_kept_whole(session: Session) -> None:
         steps += 1
     assert steps == 200
     assert session.record == Record()
+
+
+@pytest.fixture
+def three(session: Session) -> Session:
+    """A session whose paper has three outcomes, named by their places; the first is in view."""
+    outcomes = tuple(Outcome(name_text=name) for name in "abc")
+    session.change_record(msgspec.structs.replace(session.record, outcomes=outcomes))
+    return session
+
+
+def names(session: Session) -> str:
+    """The names of the outcomes in their order."""
+    return "".join(outcome.name_text for outcome in session.record.outcomes)
+
+
+def test_looking_at_another_outcome_brings_its_findings(three: Session, heard: list[tuple[object, object]]) -> None:
+    """The same record with other findings, told once; it is no step to undo."""
+    three.look_at(2)
+    typed(three, "38", "374", "70", "339")
+    three.look_at(0)
+    heard.clear()
+    three.look_at(2)
+    assert three.outcome.name_text == "c"
+    assert heard == [(three.record, appraise(three.outcome, three.record.choices, deferring=True))]
+    steps = 0
+    while three.can_undo:
+        three.undo()
+        steps += 1
+    assert steps == 5
+
+
+def test_looking_where_one_looks_tells_nobody(three: Session, heard: list[tuple[object, object]]) -> None:
+    """Nothing changes, so no view is drawn anew."""
+    heard.clear()
+    three.look_at(0)
+    assert heard == []
+
+
+@pytest.mark.parametrize("place", [-1, 3])
+def test_an_outcome_that_is_not_there_is_refused(three: Session, place: int) -> None:
+    """Neither looking nor changing leads to a place without an outcome, and nothing is harmed."""
+    record = three.record
+    with pytest.raises(IndexError):
+        three.look_at(place)
+    with pytest.raises(IndexError):
+        three.change_record(Record(title_text="x", outcomes=record.outcomes), place)
+    assert three.record is record
+    assert three.view == 0
+
+
+def test_typing_goes_into_the_outcome_in_view(three: Session) -> None:
+    """The others stay the very ones that they were."""
+    first, _, third = three.record.outcomes
+    three.look_at(1)
+    three.edit_text("span_text", "12 months")
+    assert [outcome.span_text for outcome in three.record.outcomes] == ["", "12 months", ""]
+    assert three.record.outcomes[0] is first
+    assert three.record.outcomes[2] is third
+
+
+def test_another_outcome_ends_the_run(three: Session) -> None:
+    """The same field of two outcomes is two steps, even if it never lost focus."""
+    three.edit_text("span_text", "1 year")
+    three.look_at(1)
+    three.edit_text("span_text", "2 years")
+    three.undo()
+    assert [outcome.span_text for outcome in three.record.outcomes] == ["1 year", "", ""]
+
+
+def test_undo_and_redo_return_to_the_outcome_that_changed(three: Session) -> None:
+    """Whichever outcome is looked at meanwhile, and the field's focus is asked for once it is in view."""
+    seen: list[tuple[str, str]] = []
+    three.focus_wanted.connect(lambda field: seen.append((three.outcome.name_text, field)))
+    three.look_at(1)
+    three.edit_text("span_text", "12 months")
+    three.look_at(2)
+    three.undo()
+    assert (three.view, three.outcome.span_text) == (1, "")
+    three.look_at(0)
+    three.redo()
+    assert (three.view, three.outcome.span_text) == (1, "12 months")
+    assert seen == [("b", "span_text"), ("b", "span_text")]
+
+
+def test_what_belongs_to_the_paper_moves_no_view(three: Session) -> None:
+    """Its title and its family of intervals are undone from wherever one looks."""
+    three.edit_text("title_text", "A trial")
+    three.change_record(editing.with_family(three.record, "exact"))
+    three.look_at(2)
+    three.undo()
+    three.undo()
+    three.redo()
+    three.redo()
+    assert three.view == 2
+    assert (three.record.title_text, three.record.choices.family) == ("A trial", "exact")
+
+
+@pytest.mark.parametrize(
+    ("change", "view", "after"),
+    [
+        (lambda record: editing.add_outcome(record, 1), 2, "abc"),
+        (lambda record: editing.copy_outcome(record, 1), 2, "abbc"),
+        (lambda record: editing.move_outcome(record, 1, 2), 2, "acb"),
+        (lambda record: editing.move_outcome(record, 1, 0), 0, "bac"),
+        (lambda record: editing.remove_outcome(record, 1), 1, "ac"),
+    ],
+)
+def test_each_command_about_outcomes_is_one_step_with_its_view(
+    three: Session, change: Callable[[Record], Record], view: int, after: str
+) -> None:
+    """The outcome that is there afterwards is in view; undo shows the one from which the command was given."""
+    three.look_at(1)
+    before = three.record
+    three.change_record(change(three.record), view)
+    assert (names(three), three.view) == (after, view)
+    changed = three.record
+    three.look_at(0)
+    three.undo()
+    assert three.record is before
+    assert three.view == 1
+    three.redo()
+    assert three.record is changed
+    assert three.view == view
+
+
+def test_another_record_is_shown_from_its_first_outcome(three: Session) -> None:
+    """A new record without a place begins at the first one; a change of the outcome in view alone stays there."""
+    three.look_at(2)
+    three.change_outcome(editing.swap_groups(three.outcome))
+    assert three.view == 2
+    three.change_record(Record())
+    assert three.view == 0
+    three.undo()
+    assert (three.view, names(three)) == (2, "abc")
+
+
+def test_an_equal_record_may_still_move_the_view(three: Session) -> None:
+    """Removing nothing is no step, but the place asked for is shown."""
+    three.change_record(Record(outcomes=three.record.outcomes, choices=three.record.choices), 2)
+    assert three.view == 2
+    three.undo()
+    assert names(three) == ""

@@ -16,16 +16,23 @@ RECORD_FIELDS = ("title_text", "source_text")
 
 
 class Step(NamedTuple):
-    """A state to go back to, and the field that had been changed after it ("" for a command)."""
+    """A state to go back or forth to, and where the change between it and its neighbour was made.
+
+    ``field`` is the one that was typed into ("" for a command). ``before`` and ``after`` are the outcomes in view on
+    either side of the change, None where it was no outcome's but the paper's: then the view stays where it is.
+    """
 
     record: Record
     field: str
+    before: int | None
+    after: int | None
 
 
 class Session(QObject):
     """Holds the record; a change makes a new record, the findings follow, one signal reaches every view.
 
-    A run of typing in one field is one step back, until the field loses focus.
+    A run of typing in one field is one step back, until the field loses focus. Which outcome is in view is the
+    window's own and no step; an undo or a redo brings the outcome into view that it changes.
 
     **Signals**
         changed: the record or its findings are new. Carries both; the findings are None until the first
@@ -70,14 +77,15 @@ class Session(QObject):
         """Take the text of a field at a keystroke."""
         from fourcount.record import editing  # no first paint needs it
 
-        if field in RECORD_FIELDS:
+        place = None if field in RECORD_FIELDS else self.view
+        if place is None:
             record = editing.edit_record_text(self.record, field, text)
         else:
             record = self._with(editing.edit_text(self.outcome, field, text))
         if record == self.record:
             return
         if self._run != field:
-            self._past.append(Step(self.record, field))
+            self._past.append(Step(self.record, field, place, place))
             self._run = field
         self._take(record)
 
@@ -90,20 +98,38 @@ class Session(QObject):
         """Take a new outcome in view, as one step."""
         self.change_record(self._with(outcome))
 
-    def change_record(self, record: Record) -> None:
-        """Take a new record, as one step; nothing happens if it is equal."""
-        if record != self.record:
-            self._past.append(Step(self.record, ""))
+    def change_record(self, record: Record, view: int | None = None) -> None:
+        """Take a new record, as one step, and bring an outcome into view; nothing happens if both are as they were.
+
+        Without a place the view stays where no other outcome has changed, and goes to the first one otherwise.
+        """
+        if record == self.record:
+            self.look_at(self.view if view is None else view)
+            return
+        after = _checked(record, self._place_in(record) if view is None else view)
+        of_an_outcome = record.outcomes != self.record.outcomes or after != self.view
+        places = (self.view, after) if of_an_outcome else (None, None)
+        self._past.append(Step(self.record, "", *places))
+        self._run = ""
+        self.view = after
+        self._take(record)
+
+    def look_at(self, place: int) -> None:
+        """Bring another outcome into view; this ends a run of typing and is no step."""
+        if _checked(self.record, place) != self.view:
+            self.view = place
             self._run = ""
-            self._take(record)
+            self.announce()
 
     def undo(self) -> None:
-        """Show the state before the last step."""
-        self._travel(self._past, self._future)
+        """Show the state before the last step, and the outcome that the step changed."""
+        if self._past:
+            self._travel(self._past, self._future, self._past[-1].before)
 
     def redo(self) -> None:
-        """Show the state after the step that was last undone."""
-        self._travel(self._future, self._past)
+        """Show the state after the step that was last undone, and the outcome that it changes."""
+        if self._future:
+            self._travel(self._future, self._past, self._future[-1].after)
 
     def announce(self) -> None:
         """Appraise the outcome in view and tell every view."""
@@ -140,18 +166,32 @@ class Session(QObject):
 
         return editing.with_outcome(self.record, self.view, outcome)
 
+    def _place_in(self, record: Record) -> int:
+        """The place in view where the other outcomes of a new record are those of the present one, else the first."""
+        before, after = list(self.record.outcomes), list(record.outcomes)
+        if len(before) != len(after):
+            return 0
+        del before[self.view], after[self.view]
+        return self.view if before == after else 0
+
     def _take(self, record: Record) -> None:
         self._future.clear()
         self.record = record
         self.announce()
 
-    def _travel(self, source: list[Step], target: list[Step]) -> None:
-        if not source:
-            return
+    def _travel(self, source: list[Step], target: list[Step], view: int | None) -> None:
         self._run = ""
         step = source.pop()
-        target.append(Step(self.record, step.field))
+        target.append(step._replace(record=self.record))
         self.record = step.record
+        self.view = self.view if view is None else view
         self.announce()
         if step.field:
             self.focus_wanted.emit(step.field)
+
+
+def _checked(record: Record, place: int) -> int:
+    """The place, where the record has an outcome there."""
+    if not 0 <= place < len(record.outcomes):
+        raise IndexError(f"the record has no outcome at {place}")
+    return place
