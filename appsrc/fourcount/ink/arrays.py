@@ -1,74 +1,114 @@
-"""Icon arrays and bar pairs: a plan laid down on a painter."""
+"""Icon arrays and bars: a plan laid down on a painter."""
 
 from __future__ import annotations
 
 from functools import lru_cache
 
 from PySide6.QtCore import QPointF, QRectF, Qt
-from PySide6.QtGui import QColor, QPainter, QPen, QPixmap
+from PySide6.QtGui import QBrush, QColor, QPainter, QPen, QPixmap
 
 from fourcount.ink.palette import Palette
-from fourcount.ink.people import STATES, State, draw_icon
-from fourcount.picture.grid import GRIDS, Grid
-from fourcount.picture.plan import Array
+from fourcount.ink.people import draw_icon, is_vector
+from fourcount.ink.shapes import TALL
+from fourcount.picture.bar_pair import Bar
+from fourcount.picture.grid import GRIDS, Laid, lay
+from fourcount.picture.options import Icons
+from fourcount.picture.plan import Array, State
 
 
-def array_height(denominator: int, width: float) -> float:
-    """Height of an array that is ``width`` wide, both in logical pixels."""
-    grid = GRIDS[denominator]
-    return grid.height * width / grid.width
+def lay_array(denominator: int, width: float, most: float, icons: Icons = "person") -> Laid:
+    """An array in at most ``width``, its cells at most ``most`` wide; a hundred people have cells of their shape."""
+    return lay(GRIDS[denominator], width, most, TALL[icons] if denominator == 100 else 1.0)
 
 
-def draw_array(painter: QPainter, area: QRectF, array: Array, denominator: int, palette: Palette) -> None:
-    """Draw every icon of a group, filled from the top left; rows are laid down as ready-made strips.
-
-    A row is one copy of a strip where all its icons share a state, so that ten thousand icons cost a hundred
-    copies and a repaint stays within a frame.
-    """
-    grid = GRIDS[denominator]
-    side = min(area.width() / grid.width, area.height() / grid.height)
-    ratio = painter.device().devicePixelRatioF()
-    start = 0
-    for state in STATES:
-        count = getattr(array, state)
-        if count:
-            strip = _row_strip(state, denominator, side, ratio, palette)
-            _lay(painter, area.topLeft(), grid, side, ratio, strip, start, start + count)
-        start += count
-
-
-def _lay(
-    painter: QPainter, corner: QPointF, grid: Grid, side: float, ratio: float, strip: QPixmap, start: int, stop: int
+def draw_array(
+    painter: QPainter, corner: QPointF, array: Array, laid: Laid, palette: Palette, icons: Icons = "person"
 ) -> None:
-    """Copy the part of ``strip`` that each row needs for the icons ``start`` to ``stop`` in reading order."""
-    first_row, last_row = start // grid.columns, (stop - 1) // grid.columns
-    for row in range(first_row, last_row + 1):
-        left = start - row * grid.columns if row == first_row else 0
-        right = stop - 1 - row * grid.columns if row == last_row else grid.columns - 1
-        x, end = grid.x(left) * side, (grid.x(right) + 1) * side
-        target = QRectF(corner.x() + x, corner.y() + grid.y(row) * side, end - x, side)
-        painter.drawPixmap(target, strip, QRectF(x * ratio, 0, (end - x) * ratio, side * ratio))
+    """Draw every icon of a group from the top left corner on.
+
+    On a screen blocks and rows are copied from one ready-made block a state, so that ten thousand icons cost some
+    hundred copies and a repaint stays within a frame. On paper every icon is drawn as lines, sharp at any size.
+    """
+    if is_vector(painter):
+        _draw_one_by_one(painter, corner, array, laid, palette, icons)
+        return
+    place = painter.deviceTransform()
+    scale = abs(place.m11())
+    at = place.map(corner)
+    origin = QPointF(round(at.x()), round(at.y())) - at  # tiles on whole pixels stay sharp
+    corner = corner + QPointF(origin.x() / scale, origin.y() / scale)
+    for state, start, stop in array.runs():
+        tile = _tile(state, laid, scale, palette, icons)
+        for piece in laid.grid.pieces(start, stop):
+            left, top = _in_block(laid, piece.column, piece.row)
+            right, bottom = _in_block(laid, piece.column + piece.columns - 1, piece.row + piece.rows - 1)
+            box = _whole(left, top, right + laid.across, bottom + laid.down, scale)
+            x, y = laid.x(piece.column) - left, laid.y(piece.row) - top
+            x, y = round(x * scale) / scale, round(y * scale) / scale
+            where = QPointF(corner.x() + x + box.x() / scale, corner.y() + y + box.y() / scale)
+            painter.drawPixmap(QRectF(where, box.size() / scale), tile, box)
+
+
+def _draw_one_by_one(
+    painter: QPainter, corner: QPointF, array: Array, laid: Laid, palette: Palette, icons: Icons
+) -> None:
+    for state, start, stop in array.runs():
+        for icon in range(start, stop):
+            column, row = laid.grid.place(icon)
+            cell = QRectF(corner.x() + laid.x(column), corner.y() + laid.y(row), laid.across, laid.down)
+            draw_icon(painter, cell, state, palette, icons)
+
+
+def _in_block(laid: Laid, column: int, row: int) -> tuple[float, float]:
+    """Where an icon's cell begins in its own block."""
+    first_column, first_row = (n - n % laid.grid.block for n in (column, row))
+    return laid.x(column) - laid.x(first_column), laid.y(row) - laid.y(first_row)
+
+
+def _whole(left: float, top: float, right: float, bottom: float, scale: float) -> QRectF:
+    """A box in whole pixels of the device."""
+    x, y = round(left * scale), round(top * scale)
+    return QRectF(x, y, round(right * scale) - x, round(bottom * scale) - y)
 
 
 @lru_cache(maxsize=24)
-def _row_strip(state: State, denominator: int, side: float, ratio: float, palette: Palette) -> QPixmap:
-    """One full row of icons in one state, on a transparent ground, at the device's resolution."""
-    grid = GRIDS[denominator]
-    pixmap = QPixmap(int(grid.width * side * ratio) + 2, int(side * ratio) + 2)
+def _tile(state: State, laid: Laid, scale: float, palette: Palette, icons: Icons) -> QPixmap:
+    """One block of icons in one state, on a transparent ground, at the device's resolution."""
+    last = laid.grid.block - 1
+    pixmap = QPixmap(
+        int((laid.x(last) + laid.across) * scale) + 2,
+        int((laid.y(last) + laid.down) * scale) + 2,
+    )
     pixmap.fill(Qt.GlobalColor.transparent)
     painter = QPainter(pixmap)
     painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-    painter.scale(ratio, ratio)
-    for column in range(grid.columns):
-        draw_icon(painter, QRectF(grid.x(column) * side, 0, side, side), state, palette)
+    painter.scale(scale, scale)
+    for row in range(last + 1):
+        for column in range(last + 1):
+            cell = QRectF(laid.x(column), laid.y(row), laid.across, laid.down)
+            draw_icon(painter, cell, state, palette, icons)
     painter.end()
     return pixmap
 
 
-def draw_bar(painter: QPainter, area: QRectF, risk: float, top: float, palette: Palette) -> None:
-    """Draw a risk as a bar along ``area``, whose right edge stands for the risk ``top``."""
+def draw_bar(painter: QPainter, area: QRectF, bar: Bar, palette: Palette) -> None:
+    """Draw a bar in ``area``, whose right edge is the end of its scale; an interval is hatched about its end."""
+    accent = QColor(palette.accent)
     painter.setPen(QPen(QColor(palette.outline), 1))
     painter.setBrush(Qt.BrushStyle.NoBrush)
     painter.drawRect(area.adjusted(0.5, 0.5, -0.5, -0.5))
-    length = area.width() * risk / top if top else 0.0
-    painter.fillRect(QRectF(area.left(), area.top(), length, area.height()), QColor(palette.accent))
+    solid = bar.length if bar.low is None else bar.low
+    least = 1 / area.width() if bar.length else 0.0  # somebody is never drawn as nobody
+    painter.fillRect(_stretch(area, 0.0, max(solid, least)), accent)
+    if bar.low is None or bar.high is None:
+        return
+    open_part = _stretch(area, bar.low, bar.high)
+    painter.fillRect(open_part, QBrush(accent, Qt.BrushStyle.BDiagPattern))
+    painter.setPen(QPen(accent, 1))
+    painter.drawRect(open_part.adjusted(0.5, 0.5, -0.5, -0.5))
+    end = area.left() + area.width() * bar.length
+    painter.fillRect(QRectF(end - 1.5, area.top() - 3, 3, area.height() + 6), accent)
+
+
+def _stretch(area: QRectF, start: float, stop: float) -> QRectF:
+    return QRectF(area.left() + area.width() * start, area.top(), area.width() * (stop - start), area.height())

@@ -1,110 +1,114 @@
-"""The icon of one person, in its four states, and rows of them ready to be laid down."""
+"""The icon of one person in each of its states: told apart by shape and fill, not by colour."""
 
 from __future__ import annotations
 
-from functools import cache
-from typing import Literal
-
 from PySide6.QtCore import QPointF, QRectF, Qt
-from PySide6.QtGui import QColor, QPainter, QPainterPath, QPen
+from PySide6.QtGui import QColor, QPaintEngine, QPainter, QPainterPath, QPen
 
 from fourcount.ink.palette import Palette
+from fourcount.ink.shapes import TALL, shape
+from fourcount.ink.specks import draw_speck
+from fourcount.picture.options import Icons
+from fourcount.picture.plan import STATES, State
 
-State = Literal["affected", "uncertain", "avoided", "added", "others"]
-STATES: tuple[State, ...] = ("affected", "avoided", "added", "others")
+__all__ = ["FINE_FROM", "SHAPES_FROM", "STATES", "State", "draw_icon", "pixels_across"]
 
-PERSON_FROM = 12.0
-"""Below this width in device pixels an outline runs together and reads as filled: squares and dots are drawn then."""
+SHAPES_FROM = 11.5
+"""Below this width in device pixels an outline runs together and reads as filled: specks are drawn then."""
 
+FINE_FROM = 26.0
+"""From this width in device pixels on a person has legs."""
 
-@cache
-def person() -> QPainterPath:
-    """A standing figure without features in a cell of 1 by 1: a round head over a body that narrows to the feet."""
-    path = QPainterPath()
-    path.addEllipse(QPointF(0.5, 0.2), 0.125, 0.125)
-    body = QPainterPath(QPointF(0.38, 0.36))
-    body.lineTo(0.62, 0.36)
-    body.quadTo(0.71, 0.36, 0.73, 0.46)
-    body.lineTo(0.77, 0.66)
-    body.lineTo(0.65, 0.69)
-    body.lineTo(0.65, 0.93)
-    body.lineTo(0.35, 0.93)
-    body.lineTo(0.35, 0.69)
-    body.lineTo(0.23, 0.66)
-    body.lineTo(0.27, 0.46)
-    body.quadTo(0.29, 0.36, 0.38, 0.36)
-    path.addPath(body)
-    return path
+LINE = 1.15
+"""The thinnest line that still has its colour."""
+
+PAPER_SCALE = 2.0
+"""Paper and drawings of lines are taken to be as sharp as a screen of twice the usual pixels."""
+
+ON_SCREEN = (QPaintEngine.Type.Raster, QPaintEngine.Type.OpenGL2)
 
 
-def draw_icon(painter: QPainter, cell: QRectF, state: State, palette: Palette, stands_for: float | None = None) -> None:
-    """Draw one person in ``cell``: filled when affected, hollow when not, with a mark of its own in between.
+def is_vector(painter: QPainter) -> bool:
+    """Whether the device keeps lines as lines: PDF, SVG and most printers."""
+    return painter.paintEngine().type() not in ON_SCREEN
+
+
+def pixels_across(painter: QPainter, width: float) -> float:
+    """How many pixels of the device a length takes."""
+    return width * (PAPER_SCALE if is_vector(painter) else abs(painter.deviceTransform().m11()))
+
+
+def draw_icon(
+    painter: QPainter,
+    cell: QRectF,
+    state: State,
+    palette: Palette,
+    icons: Icons = "person",
+    stands_for: float | None = None,
+) -> None:
+    """Draw one icon in ``cell``: filled when affected, hollow when not, with a mark of its own in between.
 
     In a key, ``stands_for`` is the width of the icons it explains, so that it shows the very shapes that they have.
     """
-    if (stands_for or cell.width()) * painter.deviceTransform().m11() < PERSON_FROM:
-        _draw_speck(painter, cell, state, palette)
+    across = pixels_across(painter, cell.width())
+    shown = across if stands_for is None else pixels_across(painter, stands_for)
+    if shown < SHAPES_FROM:
+        draw_speck(painter, cell, state, palette)
         return
+    tall = TALL[icons]
+    side = min(cell.width(), cell.height() / tall)
     painter.save()
-    painter.translate(cell.topLeft())
-    side = min(cell.width(), cell.height())
-    painter.translate((cell.width() - side) / 2, (cell.height() - side) / 2)
+    painter.translate(cell.center() - QPointF(side / 2, side * tall / 2))
     painter.scale(side, side)
-    line = max(1.0, side * 0.05) / side
-    if state == "affected":
-        painter.fillPath(person(), QColor(palette.accent))
-    elif state == "others":
-        painter.strokePath(person(), QPen(QColor(palette.outline), line))
-    elif state == "avoided":
-        painter.strokePath(person(), _dashed(palette.outline, line))
-        painter.strokePath(_stroke_through(), _round(palette.accent, line * 1.7))
-    else:
-        painter.strokePath(person(), QPen(QColor(palette.accent), line))
-        painter.fillPath(_dot(), QColor(palette.accent))
+    _draw_state(painter, state, palette, icons, max(LINE, side * 0.058) / side, fine=across >= FINE_FROM)
     painter.restore()
 
 
-def _draw_speck(painter: QPainter, cell: QRectF, state: State, palette: Palette) -> None:
-    """The same four states where a person would be too small: block, ring of a block, cross, dot."""
-    side = min(cell.width(), cell.height())
-    centre = cell.center()
-    sizes = {"affected": 0.86, "avoided": 0.7, "added": 0.86, "others": 0.36}
-    half = side * sizes[state] / 2
-    box = QRectF(centre.x() - half, centre.y() - half, 2 * half, 2 * half)
+def _draw_state(painter: QPainter, state: State, palette: Palette, icons: Icons, line: float, *, fine: bool) -> None:
+    outline = shape(icons, fine)
+    accent, plain = QColor(palette.accent), QColor(palette.outline)
     if state == "affected":
-        painter.fillRect(box, QColor(palette.accent))
+        painter.fillPath(outline, accent)
     elif state == "others":
-        painter.fillRect(box, QColor(palette.outline))
+        painter.strokePath(outline, QPen(plain, line))
     elif state == "avoided":
-        width = max(0.7, side * 0.16)
-        painter.setPen(QPen(QColor(palette.accent), width, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))
-        painter.drawLine(box.bottomLeft(), box.topRight())
+        painter.strokePath(shape(icons), QPen(plain, line))
+        painter.strokePath(_slash(icons), QPen(QColor(palette.page), line * 4.2))
+        painter.strokePath(_slash(icons), _round(accent, line * 1.7))
+    elif state == "added":
+        painter.strokePath(outline, QPen(accent, line))
+        painter.strokePath(_plus(icons), _round(accent, line * 1.7))
     else:
-        width = max(0.7, side * 0.2)
-        painter.setPen(QPen(QColor(palette.accent), width))
-        painter.setBrush(Qt.BrushStyle.NoBrush)
-        painter.drawRect(box.adjusted(width / 2, width / 2, -width / 2, -width / 2))
+        painter.fillPath(outline.intersected(_lower_half(icons)), accent)
+        painter.strokePath(outline, QPen(accent, line))
 
 
-def _round(colour: str, width: float) -> QPen:
-    return QPen(QColor(colour), width, Qt.PenStyle.SolidLine, Qt.PenCapStyle.RoundCap, Qt.PenJoinStyle.RoundJoin)
+def _round(colour: QColor, width: float) -> QPen:
+    return QPen(colour, width, Qt.PenStyle.SolidLine, Qt.PenCapStyle.RoundCap, Qt.PenJoinStyle.RoundJoin)
 
 
-def _dashed(colour: str, width: float) -> QPen:
-    pen = QPen(QColor(colour), width)
-    pen.setDashPattern([2.0, 1.6])
-    return pen
-
-
-@cache
-def _stroke_through() -> QPainterPath:
-    path = QPainterPath(QPointF(0.16, 0.9))
-    path.lineTo(0.84, 0.16)
+def _slash(icons: Icons) -> QPainterPath:
+    """A stroke through, from the lower left to the upper right, over the edge of the shape."""
+    tall = TALL[icons]
+    beside, above = (0.17, 0.26) if icons == "person" else (0.08, 0.08)
+    path = QPainterPath(QPointF(beside, tall - above))
+    path.lineTo(1 - beside, above)
     return path
 
 
-@cache
-def _dot() -> QPainterPath:
+def _plus(icons: Icons) -> QPainterPath:
+    """A cross inside the shape."""
+    middle = 0.69 if icons == "person" else 0.5
+    half = 0.13 if icons == "person" else 0.17
+    path = QPainterPath(QPointF(0.5 - half, middle))
+    path.lineTo(0.5 + half, middle)
+    path.moveTo(0.5, middle - half)
+    path.lineTo(0.5, middle + half)
+    return path
+
+
+def _lower_half(icons: Icons) -> QPainterPath:
     path = QPainterPath()
-    path.addEllipse(QPointF(0.5, 0.57), 0.115, 0.115)
+    top = 0.73 if icons == "person" else 0.5
+    path.addRect(QRectF(0, top, 1, TALL[icons] - top))
     return path

@@ -1,31 +1,43 @@
-"""The picture for one patient: two icon arrays with their captions and key, drawn at any width."""
+"""The picture for one patient: arrays or bars with their captions, key and note, drawn at any width."""
 
 from __future__ import annotations
 
-from PySide6.QtCore import QRectF, QSize, Qt
-from PySide6.QtGui import QImage, QPainter
+from PySide6.QtCore import QPointF, QRectF
+from PySide6.QtGui import QPainter
 
-from fourcount.ink.arrays import array_height, draw_array, draw_bar
-from fourcount.ink.people import draw_icon
-from fourcount.ink.style import OnPaper, Role, Style
-from fourcount.ink.typeset import RIGHT, draw_text, text_height, text_width
-from fourcount.picture.grid import GRIDS
+from fourcount.ink.arrays import draw_array, draw_bar, lay_array
+from fourcount.ink.picture_image import as_image
+from fourcount.ink.picture_key import set_key
+from fourcount.ink.sheet import Sheet
+from fourcount.ink.style import Style
+from fourcount.ink.typeset import RIGHT
+from fourcount.picture.bar_pair import bar_pair
+from fourcount.picture.grid import Laid
+from fourcount.picture.one_array import one_array
 from fourcount.picture.options import USUAL, PictureOptions
-from fourcount.picture.plan import Array, Plan
-from fourcount.picture.scales import risk_scale
+from fourcount.picture.plan import Array, Plan, states_drawn
 from fourcount.wording.picture_words import KeyEntry, PictureWords, Side
 
 __all__ = ["KeyEntry", "Picture", "PictureWords", "Side", "as_image"]
 
-SIDE_BY_SIDE_FROM = 280
-"""Below this width (at 100% text) the two groups stand one under the other."""
+SIDE_BY_SIDE_FROM = {100: 280, 1_000: 548, 10_000: 588}
+"""Below this width (at 100% text) the two groups stand one under the other, by the denominator."""
+
+WIDEST_ICON = {100: 26, 1_000: 12, 10_000: 6}
+"""In pixels at 100% text: larger icons would only move what belongs together apart."""
 
 GAP = 28
 """Room between two groups side by side, at 100% text."""
 
+BAR = 18
+"""How thick a bar is, at 100% text."""
+
 
 class Picture:
-    """A plan with its words, laid out for a style. The same drawing serves the window and the copied picture."""
+    """A plan with its words, laid out for a style. The same drawing serves window, page and copied picture.
+
+    ``within`` is a height that the picture is to keep to where it can: its icons are made smaller.
+    """
 
     def __init__(
         self, plan: Plan, words: PictureWords, options: PictureOptions | bool = USUAL, bars: bool = False
@@ -46,177 +58,160 @@ class Picture:
     def __hash__(self) -> int:
         return hash((self.plan, self.words, self.options))
 
-    def height(self, style: Style, width: float) -> int:
-        """Height of the picture at ``width``, both in logical pixels."""
-        return round(self._run(None, style, 0, 0, width))
+    @property
+    def key(self) -> tuple[KeyEntry, ...]:
+        """The entries of the key whose states are there to be seen."""
+        seen = states_drawn(self.plan, self.options.arrangement)
+        return tuple(entry for entry in self.words.key if entry.state in seen)
 
-    def draw(self, painter: QPainter, style: Style, x: float, y: float, width: float) -> float:
+    def height(self, style: Style, width: float, within: float | None = None) -> int:
+        """Height of the picture at ``width``, in logical pixels."""
+        return round(self._run(Sheet(None, style), 0, 0, width, self._widest_icon(style, width, within)))
+
+    def draw(
+        self, painter: QPainter, style: Style, x: float, y: float, width: float, within: float | None = None
+    ) -> float:
         """Draw the picture with its top left corner at (x, y) and give the height it took."""
         painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-        painter.setRenderHint(QPainter.RenderHint.SmoothPixmapTransform)
-        return self._run(painter, style, x, y, width)
+        return self._run(Sheet(painter, style), x, y, width, self._widest_icon(style, width, within))
 
-    def _run(self, painter: QPainter | None, style: Style, x: float, y: float, width: float) -> float:
+    def columns(self, style: Style, width: float) -> tuple[tuple[float, float], ...]:
+        """Left edge and width of each array's column, from the picture's own left edge."""
+        if self.options.arrangement != "two":
+            return ((0.0, width),)
+        if self._stacked(style, width):
+            return ((0.0, width), (0.0, width))
+        each = (width - style.px(GAP)) / 2
+        return ((0.0, each), (each + style.px(GAP), each))
+
+    def _widest_icon(self, style: Style, width: float, within: float | None) -> int:
+        """How wide an icon may be: as wide as the height allows, in whole pixels."""
+        widest = style.px(WIDEST_ICON[self.plan.denominator or 100])
+        if within is None or self.bars:
+            return widest
+        fits, least = 1, 1
+        while least <= widest:
+            middle = (least + widest) // 2
+            if self._run(Sheet(None, style), 0, 0, width, middle) <= within:
+                fits, least = middle, middle + 1
+            else:
+                widest = middle - 1
+        return fits
+
+    def _run(self, sheet: Sheet, x: float, y: float, width: float, most: float) -> float:
         """Walk down the picture; without a painter only measure."""
-        top = y
-        y += self._draw_sides(painter, style, x, y, width)
-        y += style.px(10) + self._draw_key(painter, style, x, y + style.px(10), width)
+        top, px = y, sheet.style.px
+        arrange = {"two": self._two, "one": self._one, "bars": self._bars}[self.options.arrangement]
+        y += arrange(sheet, x, y, width, most)
+        if self.key:
+            stands_for = self._laid(sheet.style, width, most).across
+            y += px(12)
+            y += set_key(sheet, x, y, width, self.key, self.options.icons, stands_for)
         if self.words.note:
-            y += style.px(6)
-            y += self._text(painter, style, x, y, width, self.words.note, "small", style.palette.muted)
+            y += px(8)
+            y += sheet.text(x, y, width, self.words.note, "small", "muted")
         return y - top
 
-    def _draw_sides(self, painter: QPainter | None, style: Style, x: float, y: float, width: float) -> float:
-        pairs = ((self.words.without, self.plan.without), (self.words.with_, self.plan.with_))
-        if self._stacked(style, width):
-            top = y
-            for side, array in pairs:
-                heights = self._caption_heights(style, side, width)
-                y += self._draw_side(painter, style, x, y, width, side, array, heights) + style.px(16)
-            return y - top - style.px(16)
-        gap = style.px(GAP)
-        each = (width - gap) / 2
-        measured = [self._caption_heights(style, side, each) for side, _ in pairs]
-        heights = (max(m[0] for m in measured), max(m[1] for m in measured))
-        return max(
-            self._draw_side(painter, style, x + i * (each + gap), y, each, side, array, heights)
-            for i, (side, array) in enumerate(pairs)
-        )
+    def _laid(self, style: Style, width: float, most: float) -> Laid:
+        each = self.columns(style, width)[0][1]
+        return lay_array(self.plan.denominator or 100, each, most, self.options.icons)
 
     def _stacked(self, style: Style, width: float) -> bool:
-        """Whether one group stands under the other: ten thousand icons need all the width there is."""
-        tiny = self.plan.denominator == 10_000 and not self.bars
-        return width < style.px(SIDE_BY_SIDE_FROM) or tiny
+        return width < style.px(SIDE_BY_SIDE_FROM[self.plan.denominator or 100])
 
-    def _icon_width(self, style: Style, width: float) -> float:
-        """How wide one icon of the arrays is."""
-        each = width if self._stacked(style, width) else (width - style.px(GAP)) / 2
-        return each / GRIDS[self.plan.denominator or 100].width
+    def _two(self, sheet: Sheet, x: float, y: float, width: float, most: float) -> float:
+        """One array a group, side by side, or the second below the first."""
+        laid = self._laid(sheet.style, width, most)
+        groups = ((self.words.without, self.plan.without), (self.words.with_, self.plan.with_))
+        columns = self.columns(sheet.style, width)
+        if self._stacked(sheet.style, width):
+            top = y
+            for side, array in groups:
+                y += sheet.style.px(20) if y > top else 0
+                y += self._group(sheet, x, y, width, side, array, laid, self._heads(sheet, width, side))
+            return y - top
+        heads = self._heads(sheet, columns[0][1], *(side for side, _ in groups))
+        return max(
+            self._group(sheet, x + left, y, each, side, array, laid, heads)
+            for (left, each), (side, array) in zip(columns, groups, strict=True)
+        )
 
-    def _caption_heights(self, style: Style, side: Side, width: float) -> tuple[float, float]:
-        """Heights of the title and of the count, so that both arrays can begin on one line."""
-        count = text_height(side.number, style.font("figure"), width)
-        if self._breaks(style, side, width):
-            count += text_height(side.percent, style.font("body"), width)
-        return text_height(side.title, style.font("strong"), width), count
-
-    def _breaks(self, style: Style, side: Side, width: float) -> bool:
-        """Whether count and percentage need more than one line."""
-        one_line = text_width(side.number, style.font("figure")) + text_width(f"  {side.percent}", style.font("body"))
-        return one_line > width
-
-    def _draw_side(
+    def _group(
         self,
-        painter: QPainter | None,
-        style: Style,
+        sheet: Sheet,
         x: float,
         y: float,
         width: float,
         side: Side,
         array: Array,
-        heights: tuple[float, float],
+        laid: Laid,
+        heads: tuple[float, float],
     ) -> float:
-        top, palette = y, style.palette
-        self._text(painter, style, x, y, width, side.title, "strong", palette.ink)
-        y += heights[0] + style.px(6)
-        self._draw_count(painter, style, x, y, width, side)
-        y += heights[1] + style.px(8)
-        if self.bars:
-            risk = self.plan.without_risk if side is self.words.without else self.plan.with_risk
-            bar = style.px(18)
-            if painter:
-                scale = risk_scale((self.plan.without_risk, self.plan.with_risk))
-                draw_bar(painter, QRectF(x, y, width, bar), risk, scale.high, palette)
-            y += bar + style.px(2)
-            y += self._draw_bar_ends(painter, style, x, y, width)
-        else:
-            denominator = self.plan.denominator or 100
-            tall = array_height(denominator, width)
-            if painter:
-                draw_array(painter, QRectF(x, y, width, tall), array, denominator, palette)
-            y += tall
-        y += style.px(6)
-        y += self._text(painter, style, x, y, width, side.other, "body", palette.muted)
+        top, px = y, sheet.style.px
+        if self.options.captions:
+            sheet.text(x, y, width, side.title, "strong")
+            y += heads[0] + px(4)
+            sheet.count(x, y, width, side)
+            y += heads[1] + px(8)
+        self._array(sheet, x, y, array, laid)
+        y += laid.height
+        if self.options.captions:
+            y += px(6)
+            y += sheet.text(x, y, width, side.other, "body", "muted")
         return y - top
 
-    def _draw_bar_ends(self, painter: QPainter | None, style: Style, x: float, y: float, width: float) -> float:
-        """Name both ends of a bar's scale, so that no bar is taken for the whole."""
-        font, colour = style.font("small"), style.palette.muted
-        if painter:
-            draw_text(painter, x, y, width, self.words.bar_ends[0], font, colour)
-            draw_text(painter, x, y, width, self.words.bar_ends[1], font, colour, RIGHT)
-        return text_height(self.words.bar_ends[1], font, width)
+    def _one(self, sheet: Sheet, x: float, y: float, width: float, most: float) -> float:
+        """Both groups' captions above one array with all three states."""
+        top, px = y, sheet.style.px
+        if self.options.captions:
+            y += self._both_captions(sheet, x, y, width) + px(12)
+        laid = self._laid(sheet.style, width, most)
+        self._array(sheet, x, y, one_array(self.plan), laid)
+        return y + laid.height - top
 
-    def _draw_count(self, painter: QPainter | None, style: Style, x: float, y: float, width: float, side: Side) -> None:
-        """The count in large figures, the percentage after it on the same base line where both fit."""
-        if painter is None:
-            return
-        figure, body = style.font("figure"), style.font("body")
-        tall = draw_text(painter, x, y, width, side.number, figure, style.palette.ink)
-        if self._breaks(style, side, width):
-            draw_text(painter, x, y + tall, width, side.percent, body, style.palette.muted)
-            return
-        after = text_width(f"{side.number} ", figure)
-        drop = tall - text_height(side.percent, body, width)
-        lift = style.px(3)
-        draw_text(painter, x + after, y + drop - lift, width - after, side.percent, body, style.palette.muted)
+    def _both_captions(self, sheet: Sheet, x: float, y: float, width: float) -> float:
+        sides, px = (self.words.without, self.words.with_), sheet.style.px
+        if width < px(SIDE_BY_SIDE_FROM[100]):
+            first = self._caption(sheet, x, y, width, sides[0], self._heads(sheet, width, sides[0])) + px(12)
+            heads = self._heads(sheet, width, sides[1])
+            return first + self._caption(sheet, x, y + first, width, sides[1], heads)
+        each = (width - px(GAP)) / 2
+        heads = self._heads(sheet, each, *sides)
+        return max(self._caption(sheet, x + i * (each + px(GAP)), y, each, side, heads) for i, side in enumerate(sides))
 
-    def _draw_key(self, painter: QPainter | None, style: Style, x: float, y: float, width: float) -> float:
-        if self.bars:
-            return 0.0
-        font, icon, top, left = style.font("small"), style.px(16), y, x
-        line = max(float(icon), text_height("X", font, width))
-        stands_for = self._icon_width(style, width)
-        for entry in self.words.key:
-            wide = icon + style.px(6) + text_width(entry.text, font) + 2
-            if x > left and x + wide > left + width:
-                x, y = left, y + line + style.px(4)
-            room = min(wide, width) - icon - style.px(6)
-            tall = max(line, text_height(entry.text, font, room))
-            if painter:
-                draw_icon(painter, QRectF(x, y, icon, icon), entry.state, style.palette, stands_for)
-                draw_text(painter, x + icon + style.px(6), y, room, entry.text, font, style.palette.muted)
-            if tall > line:
-                y += tall - line
-            x += wide + style.px(16)
-        return y + line - top
+    def _bars(self, sheet: Sheet, x: float, y: float, width: float, most: float) -> float:
+        """Both bars from one line, one under the other, so that their ends can be compared."""
+        top, px = y, sheet.style.px
+        pair = bar_pair(self.plan)
+        for side, bar in ((self.words.without, pair.without), (self.words.with_, pair.with_)):
+            y += px(14) if y > top else 0
+            if self.options.captions:
+                y += self._caption(sheet, x, y, width, side, self._heads(sheet, width, side)) + px(6)
+            if sheet.painter:
+                draw_bar(sheet.painter, QRectF(x, y, width, px(BAR)), bar, sheet.style.palette)
+            y += px(BAR)
+        low, high = self.words.bar_ends
+        y += px(4)
+        sheet.text(x, y, width, low, "small", "muted")
+        y += sheet.text(x, y, width, high, "small", "muted", RIGHT)
+        return y - top
 
-    def _text(
-        self,
-        painter: QPainter | None,
-        style: Style,
-        x: float,
-        y: float,
-        width: float,
-        text: str,
-        role: Role,
-        colour: str,
-    ) -> float:
-        font = style.font(role)
-        if painter is None:
-            return text_height(text, font, width)
-        return draw_text(painter, x, y, width, text, font, colour)
+    def _heads(self, sheet: Sheet, width: float, *sides: Side) -> tuple[float, float]:
+        """Heights of title and count, the same for all ``sides``, so that what follows begins on one line."""
+        bare = sheet.measured()
+        return max(bare.title_height(side, width) for side in sides), max(
+            bare.count(0, 0, width, side) for side in sides
+        )
 
+    def _caption(self, sheet: Sheet, x: float, y: float, width: float, side: Side, heads: tuple[float, float]) -> float:
+        """Title, count and the other frame, one under the other."""
+        top, px = y, sheet.style.px
+        sheet.text(x, y, width, side.title, "strong")
+        y += heads[0] + px(4)
+        sheet.count(x, y, width, side)
+        y += heads[1] + px(2)
+        return y + sheet.text(x, y, width, side.other, "body", "muted") - top
 
-def as_image(picture: Picture, style: Style, heading: str, cautions: str, width: int = 520, scale: int = 2) -> QImage:
-    """The picture alone on white paper: its heading above it, the sentences and cautions that belong to it below."""
-    paper = OnPaper(style)
-    margin = paper.px(28)
-    wide = paper.px(width) - 2 * margin
-    heads: list[tuple[str, Role, str]] = [(heading, "strong", paper.palette.ink)]
-    below: list[tuple[str, Role, str]] = [(line, "body", paper.palette.ink) for line in picture.words.lines]
-    below.append((cautions, "small", paper.palette.muted))
-    gap = paper.px(8)
-    tall = sum(text_height(text, paper.font(role), wide) + gap for text, role, _ in (*heads, *below))
-    height = round(tall + picture.height(paper, wide) + 2 * margin + 2 * gap)
-    image = QImage(QSize(paper.px(width), height) * scale, QImage.Format.Format_RGB32)
-    image.setDevicePixelRatio(scale)
-    image.fill(Qt.GlobalColor.white)
-    painter = QPainter(image)
-    y = float(margin)
-    y += draw_text(painter, margin, y, wide, heading, paper.font("strong"), paper.palette.ink) + gap
-    y += picture.draw(painter, paper, margin, y, wide) + 2 * gap
-    for text, role, colour in below:
-        y += draw_text(painter, margin, y, wide, text, paper.font(role), colour) + gap
-    painter.end()
-    return image
+    def _array(self, sheet: Sheet, x: float, y: float, array: Array, laid: Laid) -> None:
+        if sheet.painter:
+            draw_array(sheet.painter, QPointF(x, y), array, laid, sheet.style.palette, self.options.icons)

@@ -2,30 +2,52 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterator
 from dataclasses import dataclass
 from math import floor
+from typing import Literal
+
+from fourcount.picture.options import Arrangement
 
 DENOMINATORS = (100, 1_000, 10_000)
 NOISE = 1e-9
 """In icons: more than the float error of a difference, less than any two counts can make."""
 
 
+State = Literal["affected", "added", "uncertain", "avoided", "others"]
+STATES: tuple[State, ...] = ("affected", "added", "uncertain", "avoided", "others")
+"""What an icon can be, in the order in which an array is filled: who has the event first, who has not last."""
+
+
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Array:
-    """The icons of one group, in drawing order: affected, then changed (avoided or added), then the others."""
+    """How many icons of one group are in each state.
+
+    ``uncertain`` are those at the edge of the affected of whom the interval leaves open on which side they are.
+    """
 
     affected: int
     avoided: int
     added: int
     others: int
+    uncertain: int = 0
+
+    def runs(self) -> Iterator[tuple[State, int, int]]:
+        """Each state that is there, with its first icon and the one after its last."""
+        start = 0
+        for state in STATES:
+            count: int = getattr(self, state)
+            if count:
+                yield state, start, start + count
+            start += count
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Plan:
     """Both groups on one denominator; ``denominator`` is None where no array can show the two risks.
 
-    ``without_risk`` and ``with_risk`` are the risks themselves: captions are computed from them, never from
-    the icons.
+    ``without_risk`` and ``with_risk`` are the risks themselves, ``low`` and ``high`` the limits of the risk with where
+    its uncertainty is drawn: captions are computed from them, never from the icons.
     """
 
     denominator: int | None
@@ -33,6 +55,8 @@ class Plan:
     with_risk: float
     without: Array
     with_: Array
+    low: float | None = None
+    high: float | None = None
 
 
 def half_up(value: float) -> int:
@@ -60,21 +84,63 @@ def shows_honestly(without: float, with_: float, denominator: int) -> bool:
     return apart and faithful and whole
 
 
-def plan(without: float, with_: float) -> Plan:
-    """Lay out two risks (fractions from 0 to 1) on the first denominator that shows them honestly."""
+def plan(without: float, with_: float, low: float | None = None, high: float | None = None) -> Plan:
+    """Lay out two risks (fractions from 0 to 1) on the first denominator that shows them honestly.
+
+    ``low`` and ``high`` are limits of the risk with; the icons between them are drawn as uncertain. Where one of them
+    is not given, or does not hold the risk, none are. They have no part in the choice of the denominator.
+    """
     denominator = next((n for n in DENOMINATORS if shows_honestly(without, with_, n)), None)
     scale = denominator or 0
     before, after = half_up(without * scale), half_up(with_ * scale)
-    both = min(before, after)
+    changed = Array(
+        affected=min(before, after),
+        avoided=max(before - after, 0),
+        added=max(after - before, 0),
+        others=scale - max(before, after),
+    )
+    if low is None or high is None or not 0 <= low <= with_ <= high <= 1:
+        low = high = None
+    else:
+        changed = uncertain_between(changed, half_up(low * scale), half_up(high * scale))
     return Plan(
         denominator=denominator,
         without_risk=without,
         with_risk=with_,
         without=Array(affected=before, avoided=0, added=0, others=scale - before),
-        with_=Array(
-            affected=both,
-            avoided=max(before - after, 0),
-            added=max(after - before, 0),
-            others=scale - max(before, after),
-        ),
+        with_=changed,
+        low=low,
+        high=high,
     )
+
+
+def uncertain_between(array: Array, first: int, last: int) -> Array:
+    """The array with its icons from ``first`` up to ``last`` uncertain, whatever they were; all others stay."""
+
+    def left(start: int, stop: int) -> int:
+        return (stop - start) - max(0, min(stop, last) - max(start, first))
+
+    stays = {state: left(start, stop) for state, start, stop in array.runs()}
+    return Array(
+        affected=stays.get("affected", 0),
+        uncertain=last - first,
+        avoided=stays.get("avoided", 0),
+        added=stays.get("added", 0),
+        others=stays.get("others", 0),
+    )
+
+
+def states_drawn(plan: Plan, arrangement: Arrangement) -> tuple[State, ...]:
+    """The states that are there to be seen, and so to be explained, in the order of filling."""
+    arrays = {"two": (plan.without, plan.with_), "one": (plan.with_,), "bars": ()}[arrangement]
+    seen = {state for array in arrays for state, _, _ in array.runs()}
+    return tuple(state for state in STATES if state in seen)
+
+
+def bars_are_easier(plan: Plan) -> bool:
+    """Whether so many icons are affected that a bar pair is read with fewer errors.
+
+    From 100 of 1,000 on (McCaffery and others 2012, of pictographs against bars).
+    """
+    most = max(plan.without_risk, plan.with_risk)
+    return plan.denominator is None or (plan.denominator > 100 and most >= 0.1)

@@ -33,3 +33,10 @@ def apart(difference: float, people: int) -> str:
 def hidden(risk: float, people: int) -> bool:
     """Whether the whole number would say nobody, or everybody, of a risk that is neither."""
     return 0 < risk < 1 and numbers.people(risk, people) in (0, people)
+
+
+def percentage(risk: float, people: int) -> str:
+    """The same share as a percentage with the same digits: 12% of 100, 1.2% of 1,000."""
+    if hidden(risk, people):
+        return numbers.percent_whole(risk)
+    return f"{numbers.fixed_percent(risk, len(str(people)) - 3)}%"

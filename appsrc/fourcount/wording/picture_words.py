@@ -1,10 +1,33 @@
-"""The words inside a picture: captions, key and note, which have to survive a screenshot."""
+"""The words inside a picture: captions, key and note, which have to survive a screenshot.
+
+Every number is computed from the risks, never from the icons that were drawn.
+"""
 
 from __future__ import annotations
 
-from typing import Literal, NamedTuple
+from typing import Literal, NamedTuple, Protocol
 
-KeyState = Literal["affected", "uncertain", "avoided", "added", "others"]
+from fourcount.appraisal.findings import OutcomeFindings
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.wording import names, numbers, of_people
+from fourcount.wording.axis import axis_words
+from fourcount.wording.form import shown_choices
+from fourcount.wording.headline import choose
+from fourcount.wording.limits import interval_name
+
+KeyState = Literal["affected", "added", "uncertain", "avoided", "others"]
+
+LONGEST_KEY = 40
+TOO_SMALL = "Too small to draw as people."
+MORE_PEOPLE = "{picture} shows {people} people: fewer could not show these risks truly."
+EACH = {"two": "Each picture", "one": "The picture"}
+WELCOME_DRAWN = "Filled: people with the welcome outcome."
+BAR_END = "The bars run to {end}, not to 100%."
+EITHER_WAY = "{words} either way"
+OPEN = "left open by the interval"
+INTERVAL_DRAWN = "{group}: {interval} {low} to {high} in {people}."
+NO_INTERVAL = "The interval has no limit on one side here, so it is not drawn."
 
 
 class Side(NamedTuple):
@@ -24,9 +47,11 @@ class KeyEntry(NamedTuple):
 
 
 class PictureWords(NamedTuple):
-    """All words of a picture. ``note`` says a denominator other than 100, or that the risks are too small to draw.
+    """All words of a picture.
 
-    ``bar_ends`` are the ends of the scale on which the bars are drawn.
+    ``key`` has every state that could be drawn; a picture shows the entries of those that are. ``note`` says a
+    denominator other than 100, or that the risks are too small to draw. ``lines`` belong below a picture that leaves
+    the window. ``bar_ends`` are the ends of the scale on which the bars are drawn.
     """
 
     without: Side
@@ -35,3 +60,146 @@ class PictureWords(NamedTuple):
     note: str
     lines: tuple[str, ...]
     bar_ends: tuple[str, str] = ("", "")
+
+
+class Said(NamedTuple):
+    """What a page calls things where it has words of its own; "" takes those of the window.
+
+    ``turned`` says that people without the counted outcome are drawn as affected; ``event`` and ``other`` are then
+    the words of that side.
+    """
+
+    event: str = ""
+    other: str = ""
+    without_title: str = ""
+    with_title: str = ""
+    avoided: str = ""
+    added: str = ""
+    uncertain: str = ""
+    turned: bool = False
+
+
+USUAL_WORDS = Said()
+
+
+class Drawn(Protocol):
+    """What words need to know of a plan."""
+
+    @property
+    def denominator(self) -> int | None: ...
+    @property
+    def without_risk(self) -> float: ...
+    @property
+    def with_risk(self) -> float: ...
+    @property
+    def low(self) -> float | None: ...
+    @property
+    def high(self) -> float | None: ...
+
+
+class Asked(Protocol):
+    """What words need to know of a picture's options."""
+
+    @property
+    def arrangement(self) -> str: ...
+    @property
+    def uncertainty(self) -> bool: ...
+
+
+def people_of(drawn: Drawn) -> int:
+    """Of how many people the captions speak: those drawn, else a round number that says what is so."""
+    return (
+        drawn.denominator
+        or choose(drawn.without_risk, drawn.with_risk, drawn.with_risk - drawn.without_risk).denominator
+    )
+
+
+def picture_words(
+    outcome: Outcome,
+    findings: OutcomeFindings,
+    choices: Choices,
+    drawn: Drawn,
+    asked: Asked,
+    said: Said = USUAL_WORDS,
+    bar_top: float = 1.0,
+) -> PictureWords:
+    """All words of a picture of two risks; ``bar_top`` is the risk at which its bars would be full."""
+    people = people_of(drawn)
+    level = interval_name(shown_choices(findings, choices).level)
+    other = said.other or _other_words(outcome, said)
+    without_title = said.without_title or f"Without: {names.label_within(outcome, 'reference')}"
+    with_title = said.with_title or f"With: {names.label_within(outcome, 'index')}"
+    low, _, high = axis_words("risk", bar_top)
+    return PictureWords(
+        without=_side(without_title, drawn.without_risk, people, other),
+        with_=_side(with_title, drawn.with_risk, people, other),
+        key=_key(outcome, asked, said),
+        note=" ".join(part for part in _notes(outcome, drawn, asked, said, level, bar_top) if part),
+        lines=(),
+        bar_ends=(low, high),
+    )
+
+
+def _side(title: str, risk: float, people: int, other: str) -> Side:
+    return Side(
+        title=title,
+        number=f"{of_people.affected(risk, people)} in {numbers.whole(people)}",
+        percent=f"({of_people.percentage(risk, people)})",
+        other=f"{of_people.unaffected(risk, people)} {other}",
+    )
+
+
+def _other_words(outcome: Outcome, said: Said) -> str:
+    return names.event_words(outcome) if said.turned else names.other_words(outcome)
+
+
+def _key(outcome: Outcome, asked: Asked, said: Said) -> tuple[KeyEntry, ...]:
+    event, other = names.event_key(outcome), names.other_key(outcome)
+    event, other = (other, event) if said.turned else (event, other)
+    event, other = said.event or event, said.other or other
+    if asked.arrangement == "one":
+        event, other = EITHER_WAY.format(words=event), EITHER_WAY.format(words=other)
+    return (
+        KeyEntry("affected", event),
+        KeyEntry("added", said.added or _changed("added", outcome, said)),
+        KeyEntry("uncertain", said.uncertain or OPEN),
+        KeyEntry("avoided", said.avoided or _changed("avoided", outcome, said)),
+        KeyEntry("others", other),
+    )
+
+
+def _changed(verb: str, outcome: Outcome, said: Said) -> str:
+    """``falls avoided, on balance``: of a welcome outcome they are lost or gained."""
+    if outcome.welcome and not said.turned:
+        verb = {"avoided": "lost", "added": "gained"}[verb]
+    named = outcome.counted == "left" and not said.turned
+    name = names.mid_sentence(names.outcome_name(outcome)) if named else ""
+    return f"{name} {verb}, on balance" if name and len(name) <= LONGEST_KEY else f"{verb}, on balance"
+
+
+def _notes(outcome: Outcome, drawn: Drawn, asked: Asked, said: Said, level: str, bar_top: float) -> tuple[str, ...]:
+    """What has to be said of the picture itself, whatever else stands on the page."""
+    welcome = WELCOME_DRAWN if outcome.welcome and not said.turned and drawn.denominator else ""
+    scale = ""
+    if drawn.denominator is None:
+        scale = TOO_SMALL
+    elif drawn.denominator != 100 and asked.arrangement in EACH:
+        scale = MORE_PEOPLE.format(picture=EACH[asked.arrangement], people=numbers.whole(drawn.denominator))
+    bars = drawn.denominator is None or asked.arrangement not in EACH
+    ends = BAR_END.format(end=numbers.percent_given(bar_top)) if bars and bar_top < 1 else ""
+    return welcome, scale, ends, _interval(outcome, drawn, asked, said, level)
+
+
+def _interval(outcome: Outcome, drawn: Drawn, asked: Asked, said: Said, level: str) -> str:
+    if not asked.uncertainty:
+        return ""
+    if drawn.low is None or drawn.high is None:
+        return NO_INTERVAL
+    people = people_of(drawn)
+    return INTERVAL_DRAWN.format(
+        group=said.with_title or names.sentence_case(names.in_group(outcome, "index")),
+        interval=level,
+        low=of_people.affected(drawn.low, people),
+        high=of_people.affected(drawn.high, people),
+        people=numbers.whole(people),
+    )
