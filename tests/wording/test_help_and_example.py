@@ -8,6 +8,7 @@ import sys
 import pytest
 
 from fourcount.stats.entries.carrying import CARRYING
+from fourcount.appraisal.check import check
 from fourcount.stats.entries.extras import EXTRAS
 from fourcount.stats.entries.margins import MARGINS
 from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
@@ -116,14 +117,34 @@ def test_the_limits_of_the_program_are_whole_sentences():
     assert all(text[0].isupper() and text.endswith(".") for text in limits_of_the_program())
 
 
-def test_the_worked_example_is_whole_and_says_that_it_is_invented(findings_of):
-    """Nothing is missing for a patient's picture."""
+def test_the_worked_example_says_that_it_is_invented():
+    """In the line that every copy and page carries."""
+    assert "invented" in worked_example().source_text
+
+
+@pytest.mark.parametrize(("place", "counts"), [(0, (38, 374, 70, 339)), (1, (62, 350, 49, 360))])
+def test_each_outcome_of_the_example_is_whole(place, counts, findings_of):
+    """Four counts, and nothing is missing for a patient's page: names, words, both groups and one time span."""
+    outcome = worked_example().outcomes[place]
+    found = findings_of(outcome).counts
+    seen = (found.index_events, found.index_non_events, found.reference_events, found.reference_non_events)
+    assert seen == counts
+    words = (
+        outcome.name_text, outcome.left_words_text, outcome.right_words_text, outcome.plain_event_text,
+        outcome.plain_other_text, outcome.first_label_text, outcome.second_label_text,
+    )  # fmt: skip
+    assert all(words)
+    assert outcome.span_text == worked_example().outcomes[0].span_text
+
+
+def test_the_example_sets_a_harm_beside_a_benefit(findings_of):
+    """Of the same people: fewer fall and more sleep badly, and the paper's own results follow from the counts."""
     record = worked_example()
-    assert "invented" in record.source_text
-    (outcome,) = record.outcomes
-    counts = findings_of(outcome).counts
-    assert (counts.index_events, counts.index_non_events) == (38, 374)
-    assert (counts.reference_events, counts.reference_non_events) == (70, 339)
+    benefit, harm = (findings_of(outcome) for outcome in record.outcomes)
+    assert benefit.measures["risk_difference"].estimate < 0 < harm.measures["risk_difference"].estimate
+    assert (benefit.totals.first, benefit.totals.second) == (harm.totals.first, harm.totals.second)
+    for outcome in record.outcomes:
+        assert all(figure.findings[0].agrees for figure in check(outcome, record.choices).figures)
 
 
 @pytest.mark.parametrize(
