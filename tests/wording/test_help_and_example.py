@@ -7,8 +7,8 @@ import sys
 
 import pytest
 
-from fourcount.stats.entries.carrying import CARRYING
 from fourcount.appraisal.check import check
+from fourcount.stats.entries.carrying import CARRYING
 from fourcount.stats.entries.extras import EXTRAS
 from fourcount.stats.entries.margins import MARGINS
 from fourcount.stats.entries.print_only import PRINT_METHODS, PRINT_TESTS
