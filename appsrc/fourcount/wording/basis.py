@@ -1,37 +1,46 @@
-"""What a patient's figures rest on: the starting risk, where it is from, and the effect carried to it."""
+"""What a patient's figures rest on: the starting risk, where it is from, the effect carried to it, the time span."""
 
 from __future__ import annotations
 
 from fourcount.appraisal.findings import Gap, PatientFindings
-from fourcount.record.outcome import EffectOnly, Outcome, Strata
-from fourcount.wording import limits, names, numbers
-from fourcount.wording.lines.as_printed import carried_texts
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import USUAL_LEVEL, Choices
+from fourcount.wording import effects, names, spans, starts
 
-POOLED = "pooled "
-ADJUSTED = "adjusted "
-OWN_RISK = "At the study’s own starting {risk}."
-GIVEN_RISK = "Starting risk {baseline}{source}, {effect} {value}{interval} kept constant."
+AT_OWN_RISK = "At {own}"
+OWN_RANGE = "The interval is the study’s own."
+BOTH_RANGE = "The interval holds the imprecision of both the starting risk and the {effect}."
+EFFECT_RANGE = "The interval leaves out that {baseline} is itself uncertain."
+CONSTANT_RANGE = "A difference kept constant has the same interval at every starting risk."
+USUAL = Choices(level=USUAL_LEVEL)
 
 
-def basis(outcome: Outcome, patient: PatientFindings) -> str:
+def basis(outcome: Outcome, patient: PatientFindings, choices: Choices = USUAL) -> str:
     """One sentence without which nobody who gets a copy can check it."""
-    carried = patient.carried
-    if patient.baseline_from == "reference" or isinstance(carried.estimate, Gap):
-        return OWN_RISK.format(risk=names.risk_name(outcome))
-    value, interval = carried_texts(patient.effect, outcome, carried)
-    source = " ".join(outcome.patient.starting_risk_source_text.split())
-    return GIVEN_RISK.format(
-        baseline=numbers.percent_given(patient.baseline),
-        source=f" ({source})" if source else "",
-        effect=f"{_whose(outcome)}{names.effect_name(outcome, patient.effect)}",
-        value=value,
-        interval="" if isinstance(carried.interval, Gap) else limits.bracketed(interval),
-    )
+    withheld = isinstance(patient.carried.estimate, Gap)
+    if starts.as_in_the_study(patient) or withheld:
+        return f"{_own(outcome)}."
+    if patient.range_from == "table":
+        start, effect = f"{_own(outcome)} of {starts.value(patient)}", ""
+    elif starts.own(patient):
+        start, effect = f"{_own(outcome)} of {starts.value(patient)}", effects.kept_constant(outcome, patient)
+    else:
+        start, effect = starts.given(outcome, patient, choices), effects.kept_constant(outcome, patient)
+    return f"{', '.join(part for part in (start, effect, spans.carried_to(patient)) if part)}."
 
 
-def _whose(outcome: Outcome) -> str:
-    """Which of several effects it is: the pooled one of strata, the adjusted one of a print."""
-    if isinstance(outcome.table, Strata):
-        return POOLED
-    adjusted = isinstance(outcome.table, EffectOnly) and outcome.adjusted_for_text.strip()
-    return ADJUSTED if adjusted else ""
+def range_note(outcome: Outcome, patient: PatientFindings) -> str:
+    """What the interval of the difference holds and what it leaves out; "" where there is no interval."""
+    if isinstance(patient.difference.interval, Gap):
+        return ""
+    if patient.range_from == "table":
+        return OWN_RANGE
+    if patient.effect == "risk_difference" and patient.other_span is None:
+        return CONSTANT_RANGE
+    if patient.range_from == "both":
+        return BOTH_RANGE.format(effect=effects.carried_name(outcome, patient))
+    return EFFECT_RANGE.format(baseline=starts.value(patient))
+
+
+def _own(outcome: Outcome) -> str:
+    return AT_OWN_RISK.format(own=starts.OWN.format(risk=names.risk_name(outcome)))

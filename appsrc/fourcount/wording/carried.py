@@ -2,15 +2,30 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, PatientFindings
+from fourcount.appraisal.findings import (
+    AnyNumberNeeded,
+    Figure,
+    Gap,
+    OutcomeFindings,
+    PatientFindings,
+)
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers, of_people
 from fourcount.wording.gaps import gap_text, limit_text
+from fourcount.wording.half_added import half_added
 from fourcount.wording.headline import choose
 
 NOT_GIVEN = "not given"
+NO_CHANGE = "the same number"
+PASSES_ALL = "The risk would pass 100% here."
 CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
+FALLS_BELOW_NONE = "The risk would fall below 0% here: a difference cannot be kept constant at so low a starting risk."
+OPEN_ABOVE = "The upper limit of the risk would pass 100%, so the interval is open there."
+OPEN_ABOVE_BUT_ODDS = f"{OPEN_ABOVE.removesuffix('.')}; carrying the odds ratio avoids it."
+OPEN_BELOW = "The lower limit of the risk would fall below 0%, so the interval is open there."
+NEVER_PAST = ("odds_ratio", "hazard_ratio", "rate_ratio")
+"""Effects that no starting risk takes past 100%."""
 
 
 def denominator_for_text(patient: PatientFindings) -> int:
@@ -29,6 +44,11 @@ def count(figure: Figure, people: int) -> str:
     return f"{of_people.affected(figure.estimate, people)} in {numbers.whole(people)}"
 
 
+def bare_count(figure: Figure, people: int) -> str:
+    """``12``, where a head says of how many."""
+    return NOT_GIVEN if isinstance(figure.estimate, Gap) else of_people.affected(figure.estimate, people)
+
+
 def percentage(figure: Figure, people: int) -> str:
     """The same share as a percentage with the same digits: 12% of 100, 1.2% of 1,000."""
     if isinstance(figure.estimate, Gap):
@@ -41,44 +61,110 @@ def percentage(figure: Figure, people: int) -> str:
 
 def change(difference: Figure, people: int) -> str:
     """``6 fewer in 100``, from the difference itself."""
+    if isinstance(difference.estimate, Gap):
+        return ""
+    if difference.estimate == 0:
+        return f"The same number in {numbers.whole(people)}"
+    return f"{bare_change(difference, people)} in {numbers.whole(people)}"
+
+
+def bare_change(difference: Figure, people: int) -> str:
+    """``6 fewer``, where a head says of how many."""
     change = difference.estimate
     if isinstance(change, Gap):
-        return ""
-    if change == 0:
-        return f"The same number in {numbers.whole(people)}"
-    return f"{of_people.apart(change, people)} {limits.side(change)} in {numbers.whole(people)}"
+        return NOT_GIVEN
+    return f"{of_people.apart(change, people)} {limits.side(change)}" if change else NO_CHANGE
 
 
 def interval(patient: PatientFindings, choices: Choices, people: int) -> str:
     """``95% interval 3 to 8``, or "" where there is none."""
-
-    def write(x: float) -> str:
-        return of_people.apart(x, people)
-
-    interval = limits.sided(patient.difference.interval, patient.difference.estimate, write)
+    interval = change_limits(patient.difference, people)
     return f"{limits.interval_name(choices.level)} {interval}" if interval else ""
+
+
+def change_limits(difference: Figure, people: int) -> str:
+    """``3 to 8`` people fewer or more, or "" where there is no interval."""
+    return limits.sided(difference.interval, difference.estimate, lambda x: of_people.apart(x, people))
+
+
+def risk_limits(figure: Figure, people: int) -> str:
+    """``4 to 9`` people with the event, or "" where there is no interval."""
+    interval = figure.interval
+    if isinstance(interval, Gap):
+        return ""
+    return numbers.TO.join(_end(limit, people) for limit in (interval.low, interval.high))
+
+
+def _end(limit: float | Gap, people: int) -> str:
+    if isinstance(limit, Gap):
+        return limits.WITHHELD_ENDS.get(limit.key, limits.A_WITHHELD_LIMIT)
+    return of_people.affected(limit, people)
 
 
 def number_needed(needed: AnyNumberNeeded | Gap, outcome: Outcome) -> str:
     """The number needed of this column, told apart from that of the study."""
     if isinstance(needed, Gap):
         return gap_text(needed)
-    interval = limits.number_needed_interval(needed)
-    value = f"{numbers.number_needed(needed.estimate)} ({interval})"
-    return f"{limits.needed_kind(needed)} at this starting risk {value}{names.if_caused(outcome)}."
+    return f"{limits.needed_kind(needed)} at this starting risk {_needed(needed)}{names.if_caused(outcome)}."
 
 
-def reason(gap: Gap, patient: PatientFindings) -> str:
+def needed_value(needed: AnyNumberNeeded) -> str:
+    """``NNTB 19 (14 to 38)``."""
+    return f"{limits.needed_kind(needed)} {_needed(needed)}"
+
+
+def _needed(needed: AnyNumberNeeded) -> str:
+    return f"{numbers.number_needed(needed.estimate)} ({limits.number_needed_interval(needed)})"
+
+
+def relative(ratio: Figure) -> str:
+    """``In relative words 46% lower (22% to 63%).``"""
+    if isinstance(ratio.estimate, Gap):
+        return ""
+    change = ratio.estimate - 1
+    if change in (0.0, float("inf")):
+        return ""
+    word = limits.LOWER if change < 0 else limits.HIGHER
+    interval = "" if half_added(ratio) else limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
+    return f"In relative words {numbers.percent_whole(abs(change))} {word}{interval}."
+
+
+def odds_can_be_carried(findings: OutcomeFindings) -> bool:
+    """Whether there is an odds ratio to carry instead, which no starting risk takes past 100%."""
+    if not findings.carriable:
+        return isinstance(findings.measures.get("odds_ratio"), Figure)
+    return any(one.effect == "odds_ratio" and not isinstance(one.figure.estimate, Gap) for one in findings.carriable)
+
+
+def reason(gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
     """Why something is withheld here; where a carried risk ratio passes 100%, odds never do."""
-    passes = gap.key == "beyond-one" and patient.range_from == "effect"
-    return CARRY_THE_ODDS if passes else gap_text(gap)
+    if patient.range_from == "table" or gap.key not in ("beyond-one", "beyond-zero"):
+        return gap_text(gap)
+    if gap.key == "beyond-zero":
+        return FALLS_BELOW_NONE
+    return CARRY_THE_ODDS if _offered(patient, findings) else PASSES_ALL
 
 
-def reasons(patient: PatientFindings) -> tuple[str, ...]:
+def reasons(patient: PatientFindings, findings: OutcomeFindings) -> tuple[str, ...]:
     """Why the difference, its interval or one limit is not there, each reason once."""
     difference, interval = patient.difference, patient.difference.interval
     if isinstance(difference.estimate, Gap):
-        return (reason(difference.estimate, patient),)
+        return (reason(difference.estimate, patient, findings),)
     if isinstance(interval, Gap):
-        return (gap_text(interval),)
-    return tuple(dict.fromkeys(limit_text(end) for end in (interval.low, interval.high) if isinstance(end, Gap)))
+        return (_reason_of_limit(interval, patient, findings),)
+    ends = (end for end in (interval.low, interval.high) if isinstance(end, Gap))
+    return tuple(dict.fromkeys(_reason_of_limit(end, patient, findings) for end in ends))
+
+
+def _reason_of_limit(gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
+    if patient.range_from == "table":
+        return limit_text(gap) if gap.key == "beyond-one" else gap_text(gap)
+    if gap.key == "beyond-zero":
+        return OPEN_BELOW
+    if gap.key == "beyond-one":
+        return OPEN_ABOVE_BUT_ODDS if _offered(patient, findings) else OPEN_ABOVE
+    return limit_text(gap)
+
+
+def _offered(patient: PatientFindings, findings: OutcomeFindings) -> bool:
+    return patient.effect not in NEVER_PAST and odds_can_be_carried(findings)

@@ -10,6 +10,7 @@ from fourcount.appraisal.findings import (
     Gap,
     Given,
     OutcomeFindings,
+    PatientFindings,
     PrintedFigure,
     StrataFindings,
     TimedRisks,
@@ -46,6 +47,18 @@ def level_of(findings: OutcomeFindings, choices: Choices) -> float:
     if isinstance(found, PrintedFigure):
         return found.level or USUAL_LEVEL
     return found.level if isinstance(found, TimedRisks) else choices.level
+
+
+def patient_choices(findings: OutcomeFindings, choices: Choices) -> Choices:
+    """The record's choices with the level of the patient's intervals: that of the effect that was carried.
+
+    An adjusted effect beside counts keeps the level of its print.
+    """
+    patient, adjusted = findings.patient, findings.extras.adjusted
+    beside = isinstance(patient, PatientFindings) and patient.adjusted and findings.form != "effect-only"
+    if beside and isinstance(adjusted, PrintedFigure):
+        return Choices(family=choices.family, level=adjusted.level or USUAL_LEVEL)
+    return shown_choices(findings, choices)
 
 
 def opens_more(findings: OutcomeFindings) -> bool:

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from typing import Literal
 
+from fourcount.appraisal.findings.patient import CarriedEffect
 from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import (
     Column,
@@ -40,6 +41,9 @@ DID_NOT = "did not"
 VERBS = ("did", "had", "was", "were", "got")  # a heading that begins so is a sentence's words already
 NOT_COUNTED = (Pairs, PersonTime, RiskAtTime, EffectOnly)
 """Tables whose figures are not shares of people who were followed alike."""
+
+EFFECT_NAMES = {"odds_ratio": "odds ratio", "hazard_ratio": "hazard ratio", "rate_ratio": "rate ratio"}
+"""Effects that are called the same in every design."""
 
 PREPOSITIONS = ("within", "in", "at", "over", "after", "by", "during")
 
@@ -185,7 +189,11 @@ def _other_column(outcome: Outcome) -> Column:
 
 def within_span(outcome: Outcome) -> str:
     """The time span after a verb: "within 12 months", or "" where none was typed; a survey has no "within"."""
-    span = _common_span(outcome)
+    return within(_common_span(outcome), outcome)
+
+
+def within(span: str, outcome: Outcome) -> str:
+    """A time span after a verb."""
     if not span or _begins_with_preposition(span):
         return span
     return f"({span})" if outcome.design == "survey" else f"within {span}"
@@ -226,6 +234,8 @@ def risk_name(outcome: Outcome) -> str:
     return "prevalence" if outcome.design == "survey" else "risk"
 
 
-def effect_name(outcome: Outcome, effect: Effect) -> str:
-    """What an effect is called in this design: in a survey the ratio of two prevalences."""
-    return "odds ratio" if effect == "odds_ratio" else f"{risk_name(outcome)} ratio"
+def effect_name(outcome: Outcome, effect: Effect | CarriedEffect) -> str:
+    """What an effect is called in this design: in a survey the ratio, or the difference, of two prevalences."""
+    if effect == "risk_difference":
+        return f"{risk_name(outcome)} difference"
+    return EFFECT_NAMES.get(effect, f"{risk_name(outcome)} ratio")

@@ -1,12 +1,15 @@
-"""One patient in one sentence, in the named outcome's own terms, for a letter."""
+"""One patient in a few sentences, in the named outcome's own terms, for a letter."""
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Gap, OutcomeFindings
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import carried, names, numbers, of_people
-from fourcount.wording.form import shown_choices
+from fourcount.wording import carried, limits, names, numbers, of_people, spans, starts
+from fourcount.wording.basis import OWN_RANGE, range_note
+from fourcount.wording.form import patient_choices
+from fourcount.wording.ranks import rank_lines
+from fourcount.wording.subject import subject
 
 AS_IN_THE_STUDY = "The study’s figures hold as they stand."
 
@@ -16,24 +19,46 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
     patient = findings.patient
     if isinstance(patient, Gap):
         return ""
-    if patient.baseline_from == "reference":
-        return AS_IN_THE_STUDY
-    people, choices = carried.denominator_for_text(patient), shown_choices(findings, choices)
-    span = names.within_span(outcome)
-    first = (
-        f"Of {numbers.whole(people)} people {names.in_group(outcome, 'reference')} "
-        f"{_people(patient.without.estimate, people)} {names.event_words(outcome)}{f' {span}' if span else ''}"
-    )
-    index = names.in_group(outcome, "index")
+    choices = patient_choices(findings, choices)
+    people = carried.denominator_for_text(patient)
+    ranks = rank_lines(findings, choices, people)
+    if starts.as_in_the_study(patient):
+        return " ".join((AS_IN_THE_STUDY, *ranks))
     if isinstance(patient.with_.estimate, Gap):
-        return f"{first}. {carried.reason(patient.with_.estimate, patient)}"
-    second = f"of {numbers.whole(people)} {index} {_people(patient.with_.estimate, people)}"
-    change, interval = carried.change(patient.difference, people), carried.interval(patient, choices, people)
-    said = f"{first}, {second}: {change[:1].lower()}{change[1:]}{f' ({interval})' if interval else ''}"
+        reason = carried.reason(patient.with_.estimate, patient, findings)
+        return " ".join((f"{_without(outcome, patient, choices, people)}.", reason, *ranks))
     told = patient.number_needed == findings.measures.get("number_needed")  # a design without one has said so already
     needed = "" if told else carried.number_needed(patient.number_needed, outcome)
-    return " ".join(part for part in (f"{said}.", needed, *carried.reasons(patient)) if part)
+    relative = (
+        "" if patient.effect == "risk_ratio" and patient.other_span is None else carried.relative(patient.risk_ratio)
+    )
+    note = range_note(outcome, patient)
+    more = (*carried.reasons(patient, findings), "" if note == OWN_RANGE else note, *ranks)
+    return " ".join(part for part in (_compared(outcome, patient, choices, people), needed, relative, *more) if part)
 
 
-def _people(risk: float | Gap, people: int) -> str:
-    return carried.NOT_GIVEN if isinstance(risk, Gap) else of_people.affected(risk, people)
+def _compared(outcome: Outcome, patient: PatientFindings, choices: Choices, people: int) -> str:
+    """``Of 100 people with usual care 12 fell, of 100 with night lights 6 (…): 6 fewer in 100 (…).``"""
+    spoken, change = subject(outcome), names.mid_sentence(carried.change(patient.difference, people))
+    group, number = names.in_group(spoken, "index"), _people(patient.with_, choices, people)
+    by_time = names.by_time(spoken)
+    second = f"{group} {number}" if by_time else f"of {numbers.whole(people)} {group} {number}"
+    interval = carried.interval(patient, choices, people)
+    return f"{_without(outcome, patient, choices, people)}, {second}: {change}{limits.bracketed(interval)}."
+
+
+def _without(outcome: Outcome, patient: PatientFindings, choices: Choices, people: int) -> str:
+    spoken = subject(outcome)
+    event = " ".join(part for part in (names.event_words(spoken), spans.within(spoken, patient)) if part)
+    group, number = names.in_group(spoken, "reference"), _people(patient.without, choices, people)
+    of = f"Of {numbers.whole(people)} people"
+    return f"{of} {number} {event} {group}" if names.by_time(spoken) else f"{of} {group} {number} {event}"
+
+
+def _people(figure: Figure, choices: Choices, people: int) -> str:
+    """``6 (95% interval 4 to 9)``."""
+    if isinstance(figure.estimate, Gap):
+        return carried.NOT_GIVEN
+    interval = carried.risk_limits(figure, people)
+    named = f"{limits.interval_name(choices.level)} {interval}" if interval else ""
+    return f"{of_people.affected(figure.estimate, people)}{limits.bracketed(named)}"

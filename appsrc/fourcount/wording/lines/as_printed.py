@@ -5,7 +5,7 @@ from __future__ import annotations
 import math
 import re
 
-from fourcount.appraisal.extras.printed import read_effect
+from fourcount.appraisal.extras.printed import adjusted_of, read_effect
 from fourcount.appraisal.findings import Figure, Gap, Interval, OutcomeFindings, PrintedFigure
 from fourcount.record.entry.readings import PrintedNumber
 from fourcount.record.outcome import EffectOnly, Outcome, RiskAtTime
@@ -30,10 +30,12 @@ def effect_texts(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFi
     return _texts(key, given(findings), outcome, figure)
 
 
-def carried_texts(key: str, outcome: Outcome, figure: Figure) -> Texts:
+def carried_texts(key: str, outcome: Outcome, figure: Figure, *, adjusted: bool = False) -> Texts:
     """An effect that is carried to a patient, in the digits of the print where it stands only there."""
-    alone = isinstance(outcome.table, EffectOnly)
-    printed = read_effect(outcome.paper_text, outcome.paper_measure, "paper_text").figure if alone else None
+    if isinstance(outcome.table, EffectOnly):
+        printed = read_effect(outcome.paper_text, outcome.paper_measure, "paper_text").figure
+    else:
+        printed = adjusted_of(outcome).figure if adjusted else None
     return _texts(key, printed, outcome, figure)
 
 

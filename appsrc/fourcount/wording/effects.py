@@ -1,0 +1,60 @@
+"""Effects that are carried to a patient: what each is called, and its value as the print or the program gives it."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Carriable, CarriedEffect, Figure, Gap, PatientFindings
+from fourcount.record.outcome import EffectOnly, Outcome, Strata
+from fourcount.wording import limits, names
+from fourcount.wording.lines.as_printed import carried_texts
+
+KEPT = "{name} {value}, kept constant"
+PER_100 = " per 100"
+OF_MEASURES = {
+    "pooled_": "pooled {name}",
+    "pair_odds_ratio": "{name} of the pairs",
+    "pair_": "paired {name}",
+}
+"""What an effect's name becomes by the beginning of its measure's key; the first that fits."""
+
+ADJUSTED = "adjusted {name}"
+
+
+def carriable_name(outcome: Outcome, one: Carriable) -> str:
+    """``adjusted odds ratio``."""
+    return _name(outcome, one.effect, one.measure, adjusted=one.adjusted)
+
+
+def carriable_words(outcome: Outcome, one: Carriable) -> str:
+    """``hazard ratio 0.72, kept constant``: one choice of the effect to carry."""
+    name = carriable_name(outcome, one)
+    if isinstance(one.figure.estimate, Gap):
+        return name
+    value, _ = _texts(outcome, one.effect, one.figure, adjusted=one.adjusted)
+    return KEPT.format(name=name, value=value)
+
+
+def carried_name(outcome: Outcome, patient: PatientFindings) -> str:
+    """What the effect that was carried is called."""
+    return _name(outcome, patient.effect, patient.measure, adjusted=patient.adjusted)
+
+
+def kept_constant(outcome: Outcome, patient: PatientFindings) -> str:
+    """``risk ratio 0.54 (0.37 to 0.78) kept constant``."""
+    value, interval = _texts(outcome, patient.effect, patient.carried, adjusted=patient.adjusted)
+    shown = "" if isinstance(patient.carried.interval, Gap) else limits.bracketed(interval)
+    return f"{carried_name(outcome, patient)} {value}{shown} kept constant"
+
+
+def _texts(outcome: Outcome, effect: CarriedEffect, figure: Figure, *, adjusted: bool) -> tuple[str, str]:
+    value, interval = carried_texts(effect, outcome, figure, adjusted=adjusted)
+    return f"{value}{PER_100 if effect == 'risk_difference' else ''}", interval
+
+
+def _name(outcome: Outcome, effect: CarriedEffect, measure: str, *, adjusted: bool) -> str:
+    """Which of several effects it is: the pooled one of strata, that of pairs, the adjusted one of a print."""
+    name = names.effect_name(outcome, effect)
+    if adjusted or (isinstance(outcome.table, EffectOnly) and outcome.adjusted_for_text.strip()):
+        return ADJUSTED.format(name=name)
+    key = measure or ("pooled_" if isinstance(outcome.table, Strata) else "")
+    form = next((form for begins, form in OF_MEASURES.items() if key.startswith(begins)), "{name}")
+    return form.format(name=name)

@@ -1,0 +1,35 @@
+"""A patient's time span: the study's as it was typed, or the other one that the risks were carried to."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import PatientFindings
+from fourcount.record.entry.readings import Duration
+from fourcount.record.outcome import Outcome
+from fourcount.wording import names, numbers
+
+CARRIED_TO = "carried{from_} to {other} as if hazards stayed constant"
+
+
+def duration(span: Duration) -> str:
+    """``12 months``, ``1 year``."""
+    return f"{numbers.quantity(span.value)} {span.unit}{'' if span.value == 1 else 's'}"
+
+
+def over(outcome: Outcome, patient: PatientFindings) -> str:
+    """The patient's span under a figure: "over 5 years"."""
+    return names.over_span(outcome) if patient.other_span is None else names.over(duration(patient.other_span))
+
+
+def within(outcome: Outcome, patient: PatientFindings) -> str:
+    """The patient's span after a verb: "within 5 years"."""
+    if patient.other_span is None:
+        return names.within_span(outcome)
+    return names.within(duration(patient.other_span), outcome)
+
+
+def carried_to(patient: PatientFindings) -> str:
+    """``carried from 12 months to 5 years as if hazards stayed constant``, or "" at the study's own span."""
+    if patient.other_span is None:
+        return ""
+    from_ = f" from {duration(patient.study_span)}" if patient.study_span else ""
+    return CARRIED_TO.format(from_=from_, other=duration(patient.other_span))

@@ -1,0 +1,99 @@
+"""Where a patient starts: the starting risk, its limits, and where it comes from."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Gap, PatientFindings
+from fourcount.record.entry.readings import RiskReading
+from fourcount.record.entry.starting import read_starting_risk
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from fourcount.wording import limits, names, numbers, of_people, spans
+
+RANKS = {"low": "low", "usual": "usual", "high": "high"}
+OWN = "the study’s own starting {risk}"
+FROM_RATE = "from {rate}{over}"
+FROM_OVERALL = "from an overall risk of {overall}, {share} having the exposure"
+LIKE_THE_STUDY = "people like those in the study"
+WHO_START_AT = "people who start at a {risk} of {count} in {people}"
+
+
+def own(patient: PatientFindings) -> bool:
+    """Whether the patient starts at the study's own risk."""
+    return patient.baseline_from == "reference"
+
+
+def as_in_the_study(patient: PatientFindings) -> bool:
+    """Whether the patient's figures are the study's, so that all of them stand elsewhere already."""
+    return own(patient) and patient.range_from == "table" and patient.other_span is None
+
+
+def who(outcome: Outcome, patient: PatientFindings, people: int) -> str:
+    """Whom the figures are about: "people who start at a risk of 12 in 100", never "your risk"."""
+    if own(patient) or isinstance(patient.without.estimate, Gap):
+        return LIKE_THE_STUDY
+    count = of_people.affected(patient.without.estimate, people)
+    return WHO_START_AT.format(risk=names.risk_name(outcome), count=count, people=numbers.whole(people))
+
+
+def value(patient: PatientFindings) -> str:
+    """The starting risk over the study's span: with two decimals as typed, else with one as computed."""
+    typed = patient.start_from == "typed" or (patient.start_from == "reference" and not own(patient))
+    return numbers.percent_given(patient.baseline) if typed else numbers.percent(patient.baseline)
+
+
+def named(outcome: Outcome, patient: PatientFindings) -> str:
+    """``low, 5%``; of one risk ``starting risk 12%``, of the study's own ``the study’s own starting risk, 17.1%``."""
+    if own(patient):
+        return f"{OWN.format(risk=names.risk_name(outcome))}, {value(patient)}"
+    rank = RANKS.get(patient.rank, "")
+    return f"{rank}, {value(patient)}" if rank else f"starting risk {value(patient)}"
+
+
+def given(outcome: Outcome, patient: PatientFindings, choices: Choices) -> str:
+    """``Starting risk 12% over 12 months (24 of 200, 95% interval 8.2 to 17.2%; a register)``."""
+    what = " ".join(part for part in (RANKS.get(patient.rank, ""), "starting risk", value(patient)) if part)
+    at_span = f" over {spans.duration(patient.study_span)}" if patient.other_span and patient.study_span else ""
+    source = names.bare(outcome.patient.starting_risk_source_text)
+    reading = _reading(outcome, patient)
+    precise = ", ".join(part for part in (_counted(reading), _interval(patient, reading, choices)) if part)
+    inside = "; ".join(part for part in (_worked_out(outcome, patient), precise, source) if part)
+    return f"{names.sentence_case(what)}{at_span}{limits.bracketed(inside)}"
+
+
+def _worked_out(outcome: Outcome, patient: PatientFindings) -> str:
+    """From which rate, or from which overall risk, a starting risk follows."""
+    typed = outcome.patient
+    if patient.start_from == "rate":
+        over = f" over {spans.duration(patient.study_span)}" if patient.study_span and not patient.other_span else ""
+        return FROM_RATE.format(rate=names.bare(typed.rate_text), over=over)
+    if patient.start_from == "overall":
+        overall, share = names.bare(typed.overall_risk_text), names.bare(typed.exposed_share_text)
+        return FROM_OVERALL.format(overall=overall, share=share)
+    return ""
+
+
+def _reading(outcome: Outcome, patient: PatientFindings) -> RiskReading | None:
+    """What was typed as this starting risk."""
+    if own(patient) or patient.start_from in ("rate", "overall"):
+        return None
+    typed = outcome.patient
+    text = {"low": typed.low_risk_text, "high": typed.high_risk_text}.get(patient.rank, typed.starting_risk_text)
+    reading = read_starting_risk(text)
+    return reading if isinstance(reading, RiskReading) else None
+
+
+def _counted(reading: RiskReading | None) -> str:
+    if reading is None or reading.events is None or reading.total is None:
+        return ""
+    return f"{numbers.whole(reading.events)} of {numbers.whole(reading.total)}"
+
+
+def _interval(patient: PatientFindings, reading: RiskReading | None, choices: Choices) -> str:
+    """Limits as they were typed, at their own level; those of counts at the level chosen."""
+    interval = patient.start_interval
+    if isinstance(interval, Gap):
+        return ""
+    if reading is None or reading.low is None:
+        return f"{limits.interval_name(choices.level)} {limits.percent_interval(interval, patient.baseline)}"
+    low, high = numbers.percent_given(interval.low).removesuffix("%"), numbers.percent_given(interval.high)
+    return f"{limits.interval_name(reading.level)} {low}{numbers.TO}{high}"
