@@ -9,7 +9,18 @@ import pytest
 from hypothesis import example, given
 from hypothesis import strategies as st
 
-from fourcount.picture.plan import DENOMINATORS, Array, half_up, plan
+from fourcount.picture.options import ARRANGEMENTS
+from fourcount.picture.plan import (
+    DENOMINATORS,
+    STATES,
+    Array,
+    State,
+    bars_are_easier,
+    half_up,
+    plan,
+    plan_on,
+    states_drawn,
+)
 
 
 @st.composite
@@ -172,3 +183,111 @@ def test_the_order_of_the_groups_does_not_matter(one: Fraction, other: Fraction)
     there, back = plan(float(one), float(other)), plan(float(other), float(one))
     assert there.denominator == back.denominator
     assert (there.with_.avoided, there.with_.added) == (back.with_.added, back.with_.avoided)
+
+
+def icons(array: Array) -> list[State]:
+    """The states of an array's icons, in the order of filling."""
+    return [state for state, start, stop in array.runs() for _ in range(start, stop)]
+
+
+@given(RISKS, RISKS)
+def test_states_form_blocks_from_one_corner(without: Fraction, with_: Fraction) -> None:
+    """Each state is one unbroken run: those who have the event first, the others last, and nobody between them."""
+    result = plan(float(without), float(with_))
+    for array in (result.without, result.with_):
+        runs = list(array.runs())
+        assert [start for _, start, _ in runs] == [0, *[stop for _, _, stop in runs]][: len(runs)]
+        assert [state for state, _, _ in runs] == [state for state in STATES if state in {run[0] for run in runs}]
+
+
+@given(RISKS, RISKS, RISKS, RISKS)
+@example(Fraction(12, 100), Fraction(6, 100), Fraction(4, 100), Fraction(9, 100))
+@example(Fraction(12, 100), Fraction(6, 100), Fraction(3, 100), Fraction(15, 100))
+@example(Fraction(6, 100), Fraction(12, 100), Fraction(9, 100), Fraction(15, 100))
+@example(Fraction(6, 100), Fraction(12, 100), Fraction(2, 100), Fraction(15, 100))
+def test_uncertain_icons_stand_at_the_edge(without: Fraction, with_: Fraction, one: Fraction, other: Fraction) -> None:
+    """Between the limits icons are uncertain; all others are what they are without the interval."""
+    low, high = min(one, other), max(one, other)
+    bare, edged = plan(float(without), float(with_)), plan(float(without), float(with_), float(low), float(high))
+    people = bare.denominator or 0
+    if not low <= with_ <= high:
+        assert edged == bare
+        return
+    first, last = in_so_many(low, people), in_so_many(high, people)
+    expected = ["uncertain" if first <= place < last else state for place, state in enumerate(icons(bare.with_))]
+    assert icons(edged.with_) == expected
+    assert (edged.denominator, edged.without) == (bare.denominator, bare.without)
+    assert (edged.low, edged.high) == (float(low), float(high))
+
+
+def test_uncertainty_is_off_unless_limits_are_given() -> None:
+    """Without limits no icon is uncertain, and nothing is known of an interval."""
+    result = plan(0.12, 0.06)
+    assert (result.with_.uncertain, result.low, result.high) == (0, None, None)
+
+
+@pytest.mark.parametrize(("low", "high"), [(None, 0.09), (0.04, None), (0.07, 0.09), (0.04, 0.05), (0.04, 1.2)])
+def test_half_an_interval_draws_nothing(low: float | None, high: float | None) -> None:
+    """A missing limit, one past 100%, or limits that do not hold the risk, leave the picture as it is."""
+    assert plan(0.12, 0.06, low, high) == plan(0.12, 0.06)
+
+
+def test_the_interval_of_a_decrease() -> None:
+    """12% against 6% (4 to 9%): four affected, five open, three avoided, the others as before."""
+    assert plan(0.12, 0.06, 0.04, 0.09).with_ == Array(affected=4, uncertain=5, avoided=3, added=0, others=88)
+
+
+def test_the_interval_of_an_increase() -> None:
+    """6% against 12% (9 to 15%): six affected, three surely added, six open."""
+    assert plan(0.06, 0.12, 0.09, 0.15).with_ == Array(affected=6, uncertain=6, avoided=0, added=3, others=85)
+
+
+@given(RISKS, RISKS)
+def test_a_denominator_of_the_pages_own_is_taken(without: Fraction, with_: Fraction) -> None:
+    """A plan on a given denominator has its icons on it; on its own one it is the usual plan."""
+    usual = plan(float(without), float(with_))
+    assert plan_on(usual.denominator, float(without), float(with_)) == usual
+    finer = plan_on(10_000, float(without), float(with_))
+    assert len(icons(finer.without)) == len(icons(finer.with_)) == 10_000
+
+
+@pytest.mark.parametrize(
+    ("without", "with_", "two", "one"),
+    [
+        (0.12, 0.06, ("affected", "avoided", "others"), ("affected", "avoided", "others")),
+        (0.06, 0.12, ("affected", "added", "others"), ("affected", "added", "others")),
+        (0.12, 0.12, ("affected", "others"), ("affected", "others")),
+        (0.0, 0.3, ("added", "others"), ("added", "others")),
+        (1.0, 0.9, ("affected", "avoided"), ("affected", "avoided")),
+        (0.0, 1.0, ("added", "others"), ("added",)),
+    ],
+)
+def test_exactly_the_states_drawn_are_explained(
+    without: float, with_: float, two: tuple[State, ...], one: tuple[State, ...]
+) -> None:
+    """The key has a state where it is drawn in either array, and no other; bars have no states."""
+    result = plan(without, with_)
+    assert states_drawn(result, "two") == two
+    assert states_drawn(result, "one") == one
+    assert states_drawn(result, "bars") == ()
+
+
+def test_the_uncertain_are_explained_where_they_are_drawn() -> None:
+    """An interval adds its state to the key, between those who have the event and those who have not."""
+    assert states_drawn(plan(0.12, 0.06, 0.04, 0.09), "two") == ("affected", "uncertain", "avoided", "others")
+
+
+@given(RISKS, RISKS, st.sampled_from(ARRANGEMENTS))
+def test_nothing_is_explained_of_what_is_too_small_to_draw(without: Fraction, with_: Fraction, how: str) -> None:
+    """Where no denominator can be taken there is no icon, and so no key, in any arrangement."""
+    result = plan(float(without), float(with_))
+    assert bool(states_drawn(result, how)) == (result.denominator is not None and how != "bars")  # type: ignore[arg-type]
+
+
+@pytest.mark.parametrize(
+    ("without", "with_", "easier"),
+    [(0.024, 0.026, False), (0.004, 0.3, True), (0.3, 0.004, True), (0.12, 0.06, False), (0.00001, 0.00002, True)],
+)
+def test_bars_are_suggested_for_many_of_a_thousand(without: float, with_: float, easier: bool) -> None:
+    """From 100 of 1,000 on bars are read with fewer errors (McCaffery and others 2012), and where nothing is drawn."""
+    assert bars_are_easier(plan(without, with_)) == easier

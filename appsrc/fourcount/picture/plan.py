@@ -87,10 +87,20 @@ def shows_honestly(without: float, with_: float, denominator: int) -> bool:
 def plan(without: float, with_: float, low: float | None = None, high: float | None = None) -> Plan:
     """Lay out two risks (fractions from 0 to 1) on the first denominator that shows them honestly.
 
-    ``low`` and ``high`` are limits of the risk with; the icons between them are drawn as uncertain. Where one of them
-    is not given, or does not hold the risk, none are. They have no part in the choice of the denominator.
+    ``low`` and ``high`` are limits of the risk with. They have no part in the choice of the denominator.
     """
     denominator = next((n for n in DENOMINATORS if shows_honestly(without, with_, n)), None)
+    return plan_on(denominator, without, with_, low, high)
+
+
+def plan_on(
+    denominator: int | None, without: float, with_: float, low: float | None = None, high: float | None = None
+) -> Plan:
+    """Lay out two risks on a denominator that is known to show them honestly, None where none does.
+
+    The icons between the limits are drawn as uncertain. Where a limit is not given, or they do not hold the risk, none
+    are.
+    """
     scale = denominator or 0
     before, after = half_up(without * scale), half_up(with_ * scale)
     changed = Array(
