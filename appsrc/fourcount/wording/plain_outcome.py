@@ -9,7 +9,7 @@ from __future__ import annotations
 
 from typing import NamedTuple
 
-from fourcount.appraisal.findings import Gap, OutcomeFindings, PatientFindings
+from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
 from fourcount.record.outcome import Certainty, Outcome
 from fourcount.wording import carried, event_names, names, numbers, of_people, plain, plain_texts
 from fourcount.wording.form import lacking
@@ -18,14 +18,21 @@ from fourcount.wording.headline import choose
 from fourcount.wording.patient import WHICH_PEOPLE, missing
 
 
+class Ends(NamedTuple):
+    """Two limits, each None where it cannot be given."""
+
+    low: float | None = None
+    high: float | None = None
+
+
 class PlainRisks(NamedTuple):
-    """The two risks of the unwelcome outcome; ``fewest`` and ``most`` are the limits of the difference, where given."""
+    """The two risks of the unwelcome outcome, with the limits of the difference and of the risk with."""
 
     without: float
     with_: float
     difference: float
-    fewest: float | None = None
-    most: float | None = None
+    apart: Ends = Ends()
+    with_ends: Ends = Ends()
 
 
 class PlainSide(NamedTuple):
@@ -91,15 +98,25 @@ def plain_risks(patient: PatientFindings, turned: bool) -> PlainRisks | None:
     without, with_, difference = patient.without.estimate, patient.with_.estimate, patient.difference.estimate
     if isinstance(without, Gap) or isinstance(with_, Gap) or isinstance(difference, Gap):
         return None
-    interval = patient.difference.interval
-    low = high = None
-    if not isinstance(interval, Gap):
-        low = None if isinstance(interval.low, Gap) else interval.low
-        high = None if isinstance(interval.high, Gap) else interval.high
-    if turned:
-        low, high = (None if high is None else -high), (None if low is None else -low)
-        return PlainRisks(1 - without, 1 - with_, -difference, low, high)
-    return PlainRisks(without, with_, difference, low, high)
+    apart, with_ends = _ends(patient.difference), _ends(patient.with_)
+    if not turned:
+        return PlainRisks(without, with_, difference, apart, with_ends)
+    return PlainRisks(1 - without, 1 - with_, -difference, _turned(apart, 0.0), _turned(with_ends, 1.0))
+
+
+def _ends(figure: Figure) -> Ends:
+    """Both limits of a figure's interval."""
+    interval = figure.interval
+    if isinstance(interval, Gap):
+        return Ends()
+    low, high = (None if isinstance(end, Gap) else end for end in (interval.low, interval.high))
+    return Ends(low, high)
+
+
+def _turned(ends: Ends, whole: float) -> Ends:
+    """The limits of the complement: of a difference (``whole`` 0) or of a risk (1)."""
+    low, high = (None if end is None else whole - end for end in (ends.high, ends.low))
+    return Ends(low, high)
 
 
 def people_in_text(risks: PlainRisks) -> int:
@@ -133,7 +150,7 @@ def plain_words(outcome: Outcome, patient: PatientFindings, risks: PlainRisks, p
         which=WHICH_PEOPLE,
         certainty=certainty_text(outcome.certainty, risks.difference, event, index),
         open_=plain_texts.OPEN if _reaches_no_effect(risks) else "",
-        range_=_range(risks, people),
+        range_=_range(risks, people, index),
         relative=_relative(risks, people),
         starts=_other_starts(patient, turned, people, index),
         study=_study(outcome, patient),
@@ -220,25 +237,20 @@ def _changed(outcome: Outcome, pattern: str, neutral: str, name: str) -> str:
 
 def _reaches_no_effect(risks: PlainRisks) -> bool:
     """Whether the interval of the difference leaves open that there is none; a limit that is not there is no end."""
-    low = risks.fewest if risks.fewest is not None else -1.0
-    high = risks.most if risks.most is not None else 1.0
-    return (risks.fewest is not None or risks.most is not None) and low <= 0 <= high and risks.difference != 0
+    low, high = risks.apart
+    if (low is None and high is None) or risks.difference == 0:
+        return False
+    return (low is None or low <= 0) and (high is None or high >= 0)
 
 
-def _range(risks: PlainRisks, people: int) -> str:
-    """From how many fewer to how many more it may be, in whole people; "" without both limits."""
-    if risks.fewest is None or risks.most is None:
+def _range(risks: PlainRisks, people: int, index: str) -> str:
+    """From how few to how many it may be in the group that is drawn beside the first; "" without both limits."""
+    low, high = risks.with_ends
+    if low is None or high is None:
         return ""
-    ends = [_end(limit, people) for limit in (risks.fewest, risks.most)]
-    if all(limit < 0 for limit in (risks.fewest, risks.most)):
-        ends.reverse()
-    return plain_texts.RANGE.format(low=ends[0], high=ends[1], people=numbers.whole(people))
-
-
-def _end(limit: float, people: int) -> str:
-    if limit == 0:
-        return plain_texts.NO_DIFFERENCE
-    return f"{of_people.apart(limit, people)} {'fewer' if limit < 0 else 'more'}"
+    ends = [of_people.affected(limit, people) for limit in (low, high)]
+    said = plain_texts.RANGE.format(index=index, low=ends[0], high=ends[1], people=numbers.whole(people))
+    return names.sentence_case(said)
 
 
 def _relative(risks: PlainRisks, people: int) -> str:

@@ -33,8 +33,7 @@ FEWER, MORE = "fewer, on balance", "more, on balance"
 
 LONGEST_KEY = 40
 OPEN = "The study leaves open that there is no difference."
-RANGE = "It could be from {low} to {high}, out of {people} people."
-NO_DIFFERENCE = "no difference"
+RANGE = "{index}, it could be from {low} to {high} in {people}."
 RELATIVE = "Going from {before} to {after} in {people} is also called “{percent} {word}”."
 OTHER_START = "If {before} in {people} is the risk at the start, it is {after} in {people} {index}."
 
@@ -53,8 +52,8 @@ CERTAINTY: dict[Certainty, dict[str, str]] = {
         "same": "{index}, about the same number of people {event}.",
     },
     "moderate": {
-        "fewer": "{index}, fewer people probably {event}.",
-        "more": "{index}, more people probably {event}.",
+        "fewer": "{index}, probably fewer people {event}.",
+        "more": "{index}, probably more people {event}.",
         "same": "{index}, probably about the same number of people {event}.",
     },
     "low": {
@@ -84,5 +83,5 @@ OTHER_SPAN = "The study ran for another time. We assume that the risk stays as s
 ONE_STUDY = "Based on one study. Talk it over with your clinician."
 PLACE = "{number} of {all}"
 BACK, NEXT, LEAVE = "◂ Back", "Next ▸", "Esc: leave"
-SHOW_RANGE, HIDE_RANGE = "How sure?", "Hide the range"
+SHOW_RANGE, HIDE_RANGE = "Show the range", "Hide the range"
 SCREEN_TITLE = "For the patient"

@@ -1,0 +1,284 @@
+"""The patient view: one outcome at a time on a full screen, in plain words, dark on white; Escape leaves it."""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import QEvent, QSize, Qt
+from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent, QPen, QResizeEvent
+from PySide6.QtWidgets import QBoxLayout, QScrollArea, QVBoxLayout, QWidget
+
+from fourcount.appraisal.appraise import appraise
+from fourcount.face.flow import FlowLayout
+from fourcount.face.header import Hairline
+from fourcount.face.links import Link
+from fourcount.face.on_white import OnWhite
+from fourcount.face.scroll_bar import ScrollBar
+from fourcount.face.text import Words
+from fourcount.ink.patient_page import PatientPage
+from fourcount.ink.plain_picture import Shown, shown
+from fourcount.picture.options import USUAL, PictureOptions
+from fourcount.wording import plain_texts
+from fourcount.wording.plain_outcome import why_not as why_no_screen
+
+if TYPE_CHECKING:
+    from fourcount.face.window import MainWindow
+    from fourcount.record.paper import Record
+
+__all__ = ["PatientScreen", "open_screen", "why_no_screen"]
+
+FORWARD = (Qt.Key.Key_Right, Qt.Key.Key_PageDown, Qt.Key.Key_N)
+BACKWARD = (Qt.Key.Key_Left, Qt.Key.Key_PageUp, Qt.Key.Key_B)
+FOOT_MARGIN = 45
+LINK_GAP = 18
+
+
+def open_screen(window: MainWindow) -> PatientScreen | None:
+    """Show the outcome in view to the patient; a sentence in the window, and None, where something is missing."""
+    session = window.session
+    session.settle()
+    why = why_no_screen(session.outcome, appraise(session.outcome, session.record.choices))
+    if why:
+        window.banner.tell(why)
+        return None
+    window.banner.hide()
+    screen = PatientScreen(window)
+    screen.showFullScreen()
+    screen.activateWindow()
+    screen.canvas.setFocus(Qt.FocusReason.OtherFocusReason)
+    return screen
+
+
+class Canvas(QWidget):
+    """The page as one object: painted, and described in full sentences."""
+
+    def __init__(self, look: OnWhite) -> None:
+        super().__init__()
+        self._look = look
+        self._page: PatientPage | None = None
+        self._room = QSize()
+        self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
+        look.changed.connect(self._fit)
+
+    def show_page(self, it: Shown) -> None:
+        """Show another outcome."""
+        self._page = PatientPage(it)
+        self.setAccessibleName(it.words.title)
+        self.setAccessibleDescription(it.words.sentence)
+        self._fit()
+
+    def take_room(self, room: QSize) -> None:
+        """Fill the room that there is; what needs more can be scrolled to."""
+        if room != self._room:
+            self._room = room
+            self._fit()
+
+    def _fit(self) -> None:
+        if self._page is not None and not self._room.isEmpty():
+            style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
+            tall = max(float(self._room.height()), self._page.least_height(style, self._room.width()))
+            self.setFixedSize(self._room.width(), round(tall))
+        self.update()
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        if self._page is None or self._room.isEmpty():
+            return
+        painter = QPainter(self)
+        painter.setRenderHint(QPainter.RenderHint.Antialiasing)
+        style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
+        self._page.draw(painter, style, self.width(), self.height())
+        if self.hasFocus() and self.height() > self._room.height():
+            painter.setPen(QPen(self._look.colour("accent"), 2))
+            painter.drawRect(self.rect().adjusted(1, 1, -1, -1))
+        painter.end()
+
+    def focusInEvent(self, event: QFocusEvent) -> None:
+        super().focusInEvent(event)
+        self.update()
+
+    def focusOutEvent(self, event: QFocusEvent) -> None:
+        super().focusOutEvent(event)
+        self.update()
+
+
+class Scroll(QScrollArea):
+    """A scroll area that leaves every key to the screen: arrows to the side are outcomes here."""
+
+    def keyPressEvent(self, event: QKeyEvent) -> None:
+        event.ignore()
+
+
+class PatientScreen(QWidget):
+    """A window of its own over the whole screen; arrows move among the outcomes that have what they need."""
+
+    def __init__(self, window: MainWindow) -> None:
+        super().__init__(window, Qt.WindowType.Window)
+        self._session = window.session
+        self._look = OnWhite(window.look)
+        self._look.setParent(self)
+        self._range = False
+        self._place = 0
+        self._pages: list[int] = []
+        self.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose)
+        self.setWindowTitle(plain_texts.SCREEN_TITLE)
+        self.setAutoFillBackground(True)
+        self.setPalette(self._look.qt_palette())
+        self.canvas = Canvas(self._look)
+        self.foot = Words(self._look, part="muted", text=plain_texts.ONE_STUDY)
+        self.place = Words(self._look, part="muted", wraps=False)
+        self.back = Link(self._look, plain_texts.BACK)
+        self.next = Link(self._look, plain_texts.NEXT)
+        self.range = Link(self._look, plain_texts.SHOW_RANGE)
+        self.leave = Link(self._look, plain_texts.LEAVE)
+        self._build()
+        self.back.clicked.connect(self._on_back)
+        self.next.clicked.connect(self._on_next)
+        self.range.clicked.connect(self._on_range)
+        self.leave.clicked.connect(self.close)
+        self._look.changed.connect(self._on_look_changed)
+        self._session.changed.connect(self._on_changed)
+        self._take_pages()
+        self.go_to(self._session.view)
+
+    def _build(self) -> None:
+        self._scroll = Scroll()
+        self._scroll.setWidget(self.canvas)
+        self._scroll.setFrameShape(QScrollArea.Shape.NoFrame)
+        self._scroll.setFocusPolicy(Qt.FocusPolicy.NoFocus)
+        self._scroll.setVerticalScrollBar(ScrollBar(self._look))
+        self._scroll.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
+        self._foot_row = QBoxLayout(QBoxLayout.Direction.LeftToRight)
+        self._foot_row.addWidget(self.foot, 1)
+        self._links = QWidget()
+        links = FlowLayout(self._look, self._links, gap=LINK_GAP)
+        for widget in (self.place, self.back, self.next, self.range, self.leave):
+            links.addWidget(widget)
+        self._foot_row.addWidget(self._links)
+        self._column = column = QVBoxLayout(self)
+        column.setContentsMargins(0, 0, 0, 0)
+        column.setSpacing(0)
+        column.addWidget(self._scroll, 1)
+        column.addWidget(Hairline(self._look))
+        column.addLayout(self._foot_row)
+        for before, after in (
+            (self.canvas, self.back),
+            (self.back, self.next),
+            (self.next, self.range),
+            (self.range, self.leave),
+        ):
+            self.setTabOrder(before, after)
+        self._on_look_changed()
+
+    @property
+    def outcome(self) -> int:
+        """The place in the record of the outcome shown."""
+        return self._pages[self._place]
+
+    def go_to(self, outcome: int) -> None:
+        """Show an outcome of the record, or the nearest one before it that can be shown."""
+        self._place = max((place for place, at in enumerate(self._pages) if at <= outcome), default=0)
+        self._show()
+
+    def _take_pages(self) -> None:
+        """The outcomes that have all they need: a patient is led past the others."""
+        self._pages = [place for place in range(len(self._session.record.outcomes)) if self._shown(place)]
+
+    def _shown(self, place: int) -> Shown | None:
+        record: Record = self._session.record
+        outcome = record.outcomes[place]
+        options: PictureOptions = USUAL._replace(uncertainty=self._range)
+        return shown(outcome, appraise(outcome, record.choices), options)
+
+    def _show(self) -> None:
+        it = self._shown(self.outcome)
+        if it is None:
+            return
+        self.canvas.show_page(it)
+        self._scroll.verticalScrollBar().setValue(0)
+        number, count = self._place + 1, len(self._pages)
+        several = count > 1
+        self.place.show_words(plain_texts.PLACE.format(number=number, all=count) if several else "")
+        self.back.setVisible(several)
+        self.next.setVisible(several)
+        self.back.setEnabled(number > 1)
+        self.next.setEnabled(number < count)
+        self.range.setVisible(bool(it.words.range_))
+        self.range.show_words(plain_texts.HIDE_RANGE if self._range else plain_texts.SHOW_RANGE)
+        self._fit()
+
+    def _step(self, by: int) -> None:
+        place = min(max(self._place + by, 0), len(self._pages) - 1)
+        if place != self._place:
+            self._place = place
+            self._show()
+
+    # Qt's own
+
+    def keyPressEvent(self, event: QKeyEvent) -> None:
+        key, bar = event.key(), self._scroll.verticalScrollBar()
+        if key == Qt.Key.Key_Escape:
+            self.close()
+        elif key in FORWARD:
+            self._step(1)
+        elif key in BACKWARD:
+            self._step(-1)
+        elif key == Qt.Key.Key_Home:
+            self._step(-len(self._pages))
+        elif key == Qt.Key.Key_End:
+            self._step(len(self._pages))
+        elif key in (Qt.Key.Key_Down, Qt.Key.Key_Up):
+            bar.setValue(bar.value() + self._look.px(60) * (1 if key == Qt.Key.Key_Down else -1))
+        else:
+            super().keyPressEvent(event)
+
+    def resizeEvent(self, event: QResizeEvent) -> None:
+        super().resizeEvent(event)
+        self._fit()
+
+    def changeEvent(self, event: QEvent) -> None:
+        super().changeEvent(event)
+        if event.type() == QEvent.Type.WindowStateChange:
+            self._fit()
+
+    def _fit(self) -> None:
+        """What can be done stands beside the words where there is room for both, else below them."""
+        shown = [
+            widget for widget in (self.place, self.back, self.next, self.range, self.leave) if not widget.isHidden()
+        ]
+        wide = sum(widget.sizeHint().width() for widget in shown) + self._look.px(LINK_GAP) * len(shown)
+        words = self.foot.fontMetrics().horizontalAdvance(self.foot.text())
+        beside = wide + words + self._look.px(2 * FOOT_MARGIN + LINK_GAP) <= self.width()
+        ways = QBoxLayout.Direction
+        self._foot_row.setDirection(ways.LeftToRight if beside else ways.TopToBottom)
+        self._links.setMinimumWidth(wide if beside else 0)
+        self._column.activate()
+        room = self._scroll.size()
+        self.canvas.take_room(QSize(room.width() - self._scroll.verticalScrollBar().sizeHint().width(), room.height()))
+
+    # Slots
+
+    def _on_back(self) -> None:
+        self._step(-1)
+
+    def _on_next(self) -> None:
+        self._step(1)
+
+    def _on_range(self) -> None:
+        self._range = not self._range
+        self._show()
+
+    def _on_changed(self) -> None:
+        """Follow the record; where nothing of it can be shown any more, there is nothing to see."""
+        at = self.outcome
+        self._take_pages()
+        if self._pages:
+            self.go_to(at)
+        else:
+            self.close()
+
+    def _on_look_changed(self) -> None:
+        px = self._look.px
+        self._foot_row.setContentsMargins(px(FOOT_MARGIN), px(10), px(FOOT_MARGIN), px(10))
+        self._foot_row.setSpacing(px(10))
+        self.place.setFixedHeight(px(26))  # as high as the links beside it
+        self._fit()

@@ -1,0 +1,89 @@
+"""One outcome on a screen for the patient: a title, two groups of people, one sentence; dark on white."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import QRectF
+from PySide6.QtGui import QColor, QPainter
+
+from fourcount.ink.paper_style import SCREEN_SIZES, PaperStyle
+from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
+from fourcount.ink.plain_picture import PlainPicture, Shown
+from fourcount.wording import plain_texts
+
+DESIGNED_FOR = (1280, 690)
+"""The room, in pixels, that the page fills at a scale of ``AT_THAT_SIZE``."""
+
+AT_THAT_SIZE = 1.6
+LARGEST = 3.2
+LEAST_AT_ONE = 0.93
+"""At this scale the page's text is as large as the window's own."""
+
+STEPS = 12
+MARGIN = 45
+
+
+class PatientPage:
+    """A page that fills the room it is given: text first, and the picture in what is left."""
+
+    def __init__(self, it: Shown) -> None:
+        self._words = it.words
+        self._drawn = it.plan.denominator is not None
+        self._icons = it.options.icons
+        self._range = it.options.uncertainty
+        self._picture = PlainPicture(it)
+
+    def style(self, width: float, height: float, zoom: float = 1.0) -> PaperStyle:
+        """The largest text that fits the room, never smaller than the window's own at the reader's text size.
+
+        Where even that does not fit, the page is taller than the room.
+        """
+        least = LEAST_AT_ONE * zoom
+        wanted = min(AT_THAT_SIZE * min(width / DESIGNED_FOR[0], height / DESIGNED_FOR[1]) * max(zoom, 1.0), LARGEST)
+        for step in range(STEPS):
+            style = PaperStyle(max(wanted * (1 - step * 0.05), least), SCREEN_SIZES)
+            if (
+                self._text_height(style, self._wide(style, width))
+                + self._picture.good_height(style, self._wide(style, width))
+                <= height
+            ):
+                return style
+        return PaperStyle(least, SCREEN_SIZES)
+
+    def least_height(self, style: PaperStyle, width: float) -> float:
+        """Height below which nothing would be left of the picture."""
+        wide = self._wide(style, width)
+        return self._text_height(style, wide) + self._picture.least_height(style, wide)
+
+    def _wide(self, style: PaperStyle, width: float) -> float:
+        return width - 2 * style.px(MARGIN)
+
+    def draw(self, painter: QPainter, style: PaperStyle, width: float, height: float) -> None:
+        """Draw the page in ``height``, which is at least ``least_height``."""
+        painter.fillRect(QRectF(0, 0, width, height), QColor(style.palette.page))
+        x, y, wide = style.px(MARGIN), float(style.px(20)), self._wide(style, width)
+        room = max(height - self._text_height(style, wide), self._picture.least_height(style, wide))
+        for runs, gap in self._above(style):
+            y += draw_paragraph(painter, x, y, wide, runs) + gap
+        y += self._picture.draw(painter, style, x, y, wide, room) + style.px(14)
+        for runs, gap in self._below(style):
+            y += draw_paragraph(painter, x, y, wide, runs) + gap
+
+    def _text_height(self, style: PaperStyle, wide: float) -> float:
+        paragraphs = (*self._above(style), *self._below(style))
+        return sum(paragraph_height(runs, wide) + gap for runs, gap in paragraphs) + style.px(20 + 14)
+
+    def _above(self, style: PaperStyle) -> list[tuple[list[Run], float]]:
+        ink, muted, body = style.palette.ink, style.palette.muted, style.font("body")
+        each = {"person": plain_texts.EACH_FIGURE}.get(self._icons, plain_texts.EACH_MARK) if self._drawn else ""
+        return [
+            ([Run(self._words.title, style.font("estimate"), ink)], style.px(3)),
+            ([Run(each, body, muted), Run(self._words.lead, body, muted)], style.px(14)),
+        ]
+
+    def _below(self, style: PaperStyle) -> list[tuple[list[Run], float]]:
+        words, ink, muted, body = self._words, style.palette.ink, style.palette.muted, style.font("body")
+        after = [Run(words.certainty, body, ink), Run(words.open_, body, ink), Run(words.study, body, muted)]
+        return [
+            ([Run(words.summary, style.font("sentence"), ink), Run(words.which, body, muted)], style.px(4)),
+            ([run for run in after if run.text], style.px(8)),
+        ]
