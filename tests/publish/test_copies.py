@@ -84,7 +84,7 @@ def test_every_copy_counts_the_same_people(welcome: bool, named: str, counted: s
     assert f"Index group: {with_} {words}, " in text
     assert f"Of 100 people in the reference group about {without} {words}" in text
     assert f"Of 100 people in the reference group {without} {words}" in text
-    assert f"of 100 in the index group {with_}: " in text
+    assert f"of 100 in the index group {with_} (95% interval " in text
     assert (f"People in the index group who {words}", str(with_), "", "", "", "") in table_of(outcome)
 
 

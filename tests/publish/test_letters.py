@@ -35,8 +35,8 @@ The paper’s result: 0.54 (0.37 to 0.78) follows from the counts: the risk rati
 method shown, Miettinen–Nurminen score, or by Katz log and 1 other method, at 95%.
 
 For one patient: starting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant. Of 100 people with \
-usual care 12 fell at least once within 12 months, of 100 with night lights 6: 6 fewer in 100 (95% interval 3 to 8). \
-NNTB at this starting risk 19 (14 to 38).
+usual care 12 fell at least once within 12 months, of 100 with night lights 6 (95% interval 4 to 9): 6 fewer in 100 \
+(95% interval 3 to 8). NNTB at this starting risk 19 (14 to 38). The interval leaves out that 12% is itself uncertain.
 """
 
 
@@ -100,7 +100,10 @@ def test_a_letter_of_a_welcome_event_speaks_of_the_event() -> None:
         outcome_of((60, 40, 51, 49), risk="40%"), left_welcome=True, left_words_text="healed"
     )
     text = letter(outcome)
-    assert "Of 100 people in the reference group 40 healed, of 100 in the index group 47: 7 more in 100 (95%" in text
+    assert (
+        "Of 100 people in the reference group 40 healed, of 100 in the index group 47 (95% interval 37 to 60): "
+        "7 more in 100 (95%" in text
+    )
     assert "NNTB at this starting risk" in text
     assert letter(OUTCOME).count("For one patient: at the study’s own starting risk. The study’s figures hold") == 1
 

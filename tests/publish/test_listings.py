@@ -14,12 +14,12 @@ from fourcount.record.outcome import Patient
 
 
 def test_a_listing_says_both_risks_of_a_patient() -> None:
-    """As percentages with their digits; where a risk is not given, so much is said in its place."""
+    """In people and per cent, with their ranges; where a risk is not given, so much is said in its place."""
     listed = on_screen(msgspec.structs.replace(OUTCOME, patient=Patient(starting_risk_text="12%"))).splitlines()
-    assert "  Without: usual care, 12%" in listed
-    assert "  With: night lights, 6%" in listed
+    assert "  Without: usual care, 12 in 100 (12%)" in listed
+    assert "  With: night lights, 6 in 100 (6%), 95% interval 4 to 9" in listed
     passing = on_screen(outcome_of((70, 339, 38, 374), risk="70%")).splitlines()
-    assert "  Without: reference group, 70%" in passing
+    assert "  Without: reference group, 70 in 100 (70%)" in passing
     assert "  With: index group, not given" in passing
 
 

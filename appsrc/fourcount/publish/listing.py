@@ -10,8 +10,8 @@ from fourcount.publish.letter_figures import withheld_lines
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import labels, limits
-from fourcount.wording.cautions import STANDING, caution_text
+from fourcount.wording import labels, limits, starts
+from fourcount.wording.cautions import SAID_OF_THE_PATIENT, STANDING, caution_text
 from fourcount.wording.extras import extra_lines
 from fourcount.wording.form import lacking, shown_choices
 from fourcount.wording.lines import MeasureLine, measure_lines
@@ -40,7 +40,7 @@ def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
             _wrapped(p_sentence(findings)),
             _beside(outcome, findings, choices),
             patient,
-            _cautions(findings, said=one_line(patient)),
+            _cautions(findings, said=bool(patient)),
             _wrapped(STANDING),
         ]
     )
@@ -86,25 +86,34 @@ def _beside(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
 
 
 def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
-    """Only at a starting risk from elsewhere: at the study's own the rows above say the same."""
+    """Only where the patient's figures are not the study's own: there the rows above say the same."""
     patient = findings.patient
-    if isinstance(patient, Gap) or patient.baseline_from == "reference":
+    if isinstance(patient, Gap):
         return ""
     words = patient_words(outcome, findings, choices, None)
+    head, ranks = labels.COLUMNS["patient"], tuple(_wrapped(line, INDENT) for line in words.ranks)
+    if starts.as_in_the_study(patient):
+        return "\n".join([head, *ranks]) if ranks else ""
     lines = (
         words.basis,
-        f"{words.without_title}, {words.without_percent or words.without_count}",
-        f"{words.with_title}, {words.with_percent or words.with_count}",
+        _risk(words.without_title, words.without_count, words.without_percent, words.without_interval),
+        _risk(words.with_title, words.with_count, words.with_percent, words.with_interval),
         ", ".join(part for part in (words.summary_bold, words.summary) if part),
         words.detail,
     )
-    return "\n".join([labels.COLUMNS["patient"], *(_wrapped(line, INDENT) for line in lines if line)])
+    return "\n".join([head, *(_wrapped(line, INDENT) for line in lines if line), *ranks])
 
 
-def _cautions(findings: OutcomeFindings, *, said: str) -> str:
-    """The cautions that hold, without what was ``said`` of the patient just before."""
-    texts = (one_line(caution_text(caution)) for caution in findings.cautions)
-    bullets = [_wrapped(text, "- ", INDENT) for text in texts if text not in said]
+def _risk(title: str, count: str, percent: str, interval: str) -> str:
+    """``With: night lights, 6 in 100 (6%), 95% interval 4 to 9``."""
+    return ", ".join(part for part in (title, f"{count}{limits.bracketed(percent)}", interval) if part)
+
+
+def _cautions(findings: OutcomeFindings, *, said: bool) -> str:
+    """The cautions that hold, without what was said of the patient just before, where anything was."""
+    told = SAID_OF_THE_PATIENT if said else ()
+    texts = (caution_text(caution) for caution in findings.cautions if caution.key not in told)
+    bullets = [_wrapped(text, "- ", INDENT) for text in texts]
     return "\n".join([labels.COLUMNS["cautions"], *bullets]) if bullets else ""
 
 

@@ -16,8 +16,8 @@ from fourcount.record.outcome import COUNTED_FORMS, Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import exports, labels, names, numbers
 from fourcount.wording.basis import basis
-from fourcount.wording.cautions import STANDING_FULL, caution_text
-from fourcount.wording.form import lacking, shown_choices
+from fourcount.wording.cautions import SAID_OF_THE_PATIENT, STANDING_FULL, caution_text
+from fourcount.wording.form import lacking, patient_choices, shown_choices
 from fourcount.wording.patient import picture_heading
 from fourcount.wording.patient_sentence import patient_sentence
 from fourcount.wording.sentence import headline, p_sentence
@@ -29,14 +29,15 @@ def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, versio
     ``version`` and ``today`` are given by whoever asks: this room looks at no clock.
     """
     choices = record.choices
+    patient = _patient(outcome, findings, choices)
     paragraphs = [
         one_line(picture_heading(record, outcome)),
         one_line(f"{study(outcome)} {_counts(outcome, findings)}"),
         one_line(headline(outcome, findings, choices)),
         _figures(outcome, findings, choices),
         one_line(" ".join(paper_says(outcome, findings, choices))),
-        one_line(_patient(outcome, findings, choices)),
-        _cautions(findings),
+        one_line(patient),
+        _cautions(findings, said=bool(patient)),
         one_line(" ".join(STANDING_FULL)),
         made_with(shown_choices(findings, choices), version, today, findings.form),
     ]
@@ -74,14 +75,18 @@ def _figures(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
 
 
 def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
-    if not isinstance(findings.patient, PatientFindings):
+    patient = findings.patient
+    if not isinstance(patient, PatientFindings):
         return ""
-    rests, said = basis(outcome, findings.patient), patient_sentence(outcome, findings, choices)
+    rests = basis(outcome, patient, patient_choices(findings, choices))
+    said = patient_sentence(outcome, findings, choices)
     return f"{labels.COLUMNS['patient']}: {names.mid_sentence(rests)} {said}"
 
 
-def _cautions(findings: OutcomeFindings) -> str:
-    bullets = _list(caution_text(caution) for caution in findings.cautions)
+def _cautions(findings: OutcomeFindings, *, said: bool) -> str:
+    """The cautions that hold, without what the patient's paragraph says already, where there is one."""
+    told = SAID_OF_THE_PATIENT if said else ()
+    bullets = _list(caution_text(caution) for caution in findings.cautions if caution.key not in told)
     return f"{labels.COLUMNS['cautions']}:\n{bullets}" if bullets else ""
 
 

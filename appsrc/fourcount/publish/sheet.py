@@ -12,11 +12,11 @@ from fourcount.publish.paper import paper_says, study
 from fourcount.publish.plain_text import one_line
 from fourcount.publish.sheet_counts import basis_rows
 from fourcount.publish.sheet_extras import extra_rows
+from fourcount.publish.sheet_patient import patient_rows
 from fourcount.publish.sheet_rows import Row, figure_row, measure_row, note_row, p_cell, text_row
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
-from fourcount.wording import exports, labels, limits, lines, names, numbers
-from fourcount.wording.basis import basis
+from fourcount.wording import exports, lines, names, numbers
 from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.form import measure_of, shown_choices
 from fourcount.wording.gaps import gap_text
@@ -53,7 +53,7 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
         *extra_rows(outcome, findings, choices),
         _p(findings),
         *_converted(findings),
-        *_patient(outcome, findings),
+        *patient_rows(outcome, findings, choices),
         *(note_row(exports.CAUTION_ROW, caution_text(caution)) for caution in findings.cautions),
         *(note_row(exports.NOTE_ROW, note) for note in notes),
     )
@@ -106,35 +106,8 @@ def _converted(findings: OutcomeFindings) -> tuple[Row, ...]:
         return ()
     baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
     name = exports.CONVERTED.format(baseline=baseline)
-    return (figure_row(name, conversion.risk_ratio, _key_of("odds_ratio", findings), findings.form),)
-
-
-def _key_of(effect: str, findings: OutcomeFindings) -> str:
-    """Under which key an effect's method stands: strata are carried pooled."""
-    return f"pooled_{effect}" if findings.form == "strata" else effect
-
-
-def _patient(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
-    """Only at a starting risk from elsewhere: at the study's own the rows above say the same."""
-    patient = findings.patient
-    if isinstance(patient, Gap) or patient.baseline_from == "reference":
-        return ()
-    baseline = lines.baseline_text(patient.baseline, patient.baseline_from)
-    needed = patient.number_needed
-    rows = exports.PATIENT_ROWS
-
-    def named(name: str) -> str:
-        return exports.PATIENT.format(column=labels.COLUMNS["patient"], baseline=baseline, name=name)
-
-    key, form = _key_of(patient.effect, findings), findings.form
-    return (
-        text_row(named(basis(outcome, patient))),
-        figure_row(named(rows["without"]), patient.without, key, form),
-        figure_row(named(rows["with"]), patient.with_, key, form),
-        figure_row(named(rows["difference"]), patient.difference, key, form),
-        measure_row(named(limits.needed_kind(needed)), needed, key, form),
-        figure_row(named(rows["risk_ratio"]), patient.risk_ratio, key, form),
-    )
+    key = "pooled_odds_ratio" if findings.form == "strata" else "odds_ratio"
+    return (figure_row(name, conversion.risk_ratio, key, findings.form),)
 
 
 def _safe(text: str) -> str:

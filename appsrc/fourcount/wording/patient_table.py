@@ -31,7 +31,7 @@ class Row(NamedTuple):
 
 
 def patient_table(
-    outcome: Outcome, findings: OutcomeFindings, _choices: Choices, denominator: int | None = None
+    _outcome: Outcome, findings: OutcomeFindings, _choices: Choices, denominator: int | None = None
 ) -> list[Row]:
     """``12%: 12, 6 (4 to 9), 6 fewer (3 to 8), NNTB 19 (14 to 38)``: low, usual and high in this order, or the one row.
 
@@ -43,7 +43,7 @@ def patient_table(
         return []
     people = people_of(usual, denominator)
     ranked = (("low", usual.low), ("", usual), ("high", usual.high))
-    return [_row(rank, one, outcome, findings, people) for rank, one in ranked if one is not None]
+    return [_row(rank, one, findings, people) for rank, one in ranked if one is not None]
 
 
 def patient_table_head(
@@ -56,8 +56,9 @@ def patient_table_head(
     if isinstance(patient, Gap):
         return Row(start, without, with_, DIFFERENCE, NUMBER_NEEDED)
     level = limits.interval_name(patient_choices(findings, choices).level)
-    in_people = f", in {numbers.whole(people_of(patient, denominator))} ({level})"
-    return Row(start, *(f"{name}{in_people}" for name in (without, with_, DIFFERENCE)), f"{NUMBER_NEEDED} ({level})")
+    counted = f", in {numbers.whole(people_of(patient, denominator))} ({level})"
+    needed = f"{NUMBER_NEEDED} ({level})"
+    return Row(start, f"{without}{counted}", f"{with_}{counted}", f"{DIFFERENCE}{counted}", needed)
 
 
 def people_of(patient: PatientFindings, denominator: int | None = None) -> int:
@@ -66,10 +67,10 @@ def people_of(patient: PatientFindings, denominator: int | None = None) -> int:
     return max(denominator or 0, *(carried.denominator_for_text(one) for one in found))
 
 
-def _row(rank: str, patient: PatientFindings | Gap, outcome: Outcome, findings: OutcomeFindings, people: int) -> Row:
+def _row(rank: str, patient: PatientFindings | Gap, findings: OutcomeFindings, people: int) -> Row:
     if isinstance(patient, Gap):
         return Row(names.sentence_case(rank), gap_text(patient), "", "", "")
-    label = names.sentence_case(starts.named(outcome, patient))
+    label = names.sentence_case(starts.named(patient))
     without = _cell(carried.bare_count(patient.without, people), carried.risk_limits(patient.without, people))
     if isinstance(patient.with_.estimate, Gap):
         return Row(label, without, carried.reason(patient.with_.estimate, patient, findings), "", "")

@@ -11,6 +11,7 @@ from fourcount.wording import limits, names, numbers, of_people, spans
 
 RANKS = {"low": "low", "usual": "usual", "high": "high"}
 OWN = "the study’s own starting {risk}"
+OWN_ROW = "the study’s own"
 FROM_RATE = "from {rate}{over}"
 FROM_OVERALL = "from an overall risk of {overall}, {share} having the exposure"
 LIKE_THE_STUDY = "people like those in the study"
@@ -36,17 +37,14 @@ def who(outcome: Outcome, patient: PatientFindings, people: int) -> str:
 
 
 def value(patient: PatientFindings) -> str:
-    """The starting risk over the study's span: with two decimals as typed, else with one as computed."""
-    typed = patient.start_from == "typed" or (patient.start_from == "reference" and not own(patient))
-    return numbers.percent_given(patient.baseline) if typed else numbers.percent(patient.baseline)
+    """The starting risk over the study's span: the study's own with its one decimal, else as somebody would type it."""
+    return numbers.percent(patient.baseline) if own(patient) else numbers.percent_given(patient.baseline)
 
 
-def named(outcome: Outcome, patient: PatientFindings) -> str:
-    """``low, 5%``; of one risk ``starting risk 12%``, of the study's own ``the study’s own starting risk, 17.1%``."""
-    if own(patient):
-        return f"{OWN.format(risk=names.risk_name(outcome))}, {value(patient)}"
-    rank = RANKS.get(patient.rank, "")
-    return f"{rank}, {value(patient)}" if rank else f"starting risk {value(patient)}"
+def named(patient: PatientFindings) -> str:
+    """``12%``, ``low, 5%``, ``the study’s own, 17.1%``."""
+    name = OWN_ROW if own(patient) else RANKS.get(patient.rank, "")
+    return f"{name}, {value(patient)}" if name else value(patient)
 
 
 def given(outcome: Outcome, patient: PatientFindings, choices: Choices) -> str:
