@@ -3,15 +3,20 @@
 from __future__ import annotations
 
 from collections.abc import Callable
+from pathlib import Path
 
 import pytest
-from PySide6.QtCore import QPointF, QRectF
-from PySide6.QtGui import QColor, QImage
+from PySide6.QtCore import QBuffer, QPointF, QRectF
+from PySide6.QtGui import QColor, QImage, QPainter, QPdfWriter
+from PySide6.QtSvg import QSvgGenerator
 
-from fourcount.ink.arrays import array_height, draw_array, draw_bar
+from fourcount.ink.arrays import draw_array, draw_bar, lay_array
 from fourcount.ink.palette import DARK, LIGHT, Palette
-from fourcount.ink.people import PERSON_FROM, STATES, State
+from fourcount.ink.people import STATES, State, draw_icon
+from fourcount.ink.shapes import TALL
+from fourcount.picture.bar_pair import Bar
 from fourcount.picture.grid import GRIDS
+from fourcount.picture.options import ICONS, Icons
 from fourcount.picture.plan import Array, plan
 
 SIDE = {100: 16, 1_000: 8, 10_000: 6}
@@ -20,68 +25,51 @@ SIDE = {100: 16, 1_000: 8, 10_000: 6}
 EXPECTED = {
     100: plan(0.12, 0.06),
     1_000: plan(0.052, 0.047),
-    10_000: plan(0.0015, 0.0008),
+    10_000: plan(0.0116, 0.0102, 0.0101, 0.0104),
 }
 
 
-def near(colour: QColor, named: str) -> bool:
-    """Whether a pixel has a colour, antialiasing allowed for."""
-    other = QColor(named)
-    apart = (colour.red() - other.red(), colour.green() - other.green(), colour.blue() - other.blue())
-    return max(map(abs, apart)) <= 24
-
-
-def person_seen(at: Callable[[float, float], QColor], palette: Palette) -> State:
-    """The state of a person, from spots of the cell: shoulder, hip, heart, and the end of a stroke through."""
-    if near(at(0.42, 0.46), palette.accent) and near(at(0.58, 0.8), palette.accent):
-        return "affected"
-    if not near(at(0.77, 0.235), palette.page):
-        return "avoided"
-    return "added" if near(at(0.5, 0.57), palette.accent) else "others"
-
-
-def speck_seen(at: Callable[[float, float], QColor], palette: Palette) -> State:
-    """The state of a speck, from its centre and its corners."""
-    centre = at(0.5, 0.5)
-    if near(at(0.25, 0.25), palette.accent):
-        return "affected" if near(centre, palette.accent) else "added"
-    return "others" if near(centre, palette.outline) else "avoided"
+def shades(image: QImage) -> bytes:
+    """An image in greyscale, row by row."""
+    grey = image.convertToFormat(QImage.Format.Format_Grayscale8)
+    return b"".join(bytes(grey.constScanLine(y))[: grey.width()] for y in range(grey.height()))
 
 
 @pytest.fixture
 def seen(sheet: Callable[..., object]) -> Callable[..., list[State]]:
-    """Paint an array and read the state of every icon from the pixels, in reading order."""
+    """Paint an array and say of each cell, in the order of filling, which state's icon it looks like."""
 
-    def look(array: Array, denominator: int, palette: Palette = LIGHT, ratio: int = 1) -> list[State]:
-        grid, side = GRIDS[denominator], SIDE[denominator]
-        width, height = round(grid.width * side), round(grid.height * side)
-        with sheet(width + 20, height + 20, palette.page, ratio) as (image, painter):
-            draw_array(painter, QRectF(10, 10, width, height), array, denominator, palette)
-        see = speck_seen if side * ratio < PERSON_FROM else person_seen
-        return [
-            see(spot_reader(image, QPointF(10 + grid.x(column) * side, 10 + grid.y(row) * side), side, ratio), palette)
-            for row in range(grid.rows)
-            for column in range(grid.columns)
-        ]
+    def look(
+        array: Array, denominator: int, palette: Palette = LIGHT, ratio: int = 1, icons: Icons = "person"
+    ) -> list[State]:
+        side = SIDE[denominator]
+        laid = lay_array(denominator, 2_000, side, icons)
+        with sheet(int(laid.width) + 20, int(laid.height) + 20, palette.page, ratio) as (image, painter):
+            draw_array(painter, QPointF(10, 10), array, laid, palette, icons)
+        patterns = {}
+        for state in STATES:
+            with sheet(int(laid.across), int(laid.down), palette.page, ratio) as (pattern, painter):
+                painter.setRenderHint(QPainter.RenderHint.Antialiasing)
+                draw_icon(painter, QRectF(0, 0, laid.across, laid.down), state, palette, icons)
+            patterns[shades(pattern)] = state
+        found = []
+        for icon in range(denominator):
+            column, row = laid.grid.place(icon)
+            corner = (int(10 + laid.x(column)) * ratio, int(10 + laid.y(row)) * ratio)
+            cell = shades(image.copy(*corner, int(laid.across) * ratio, int(laid.down) * ratio))
+            nearest = min(patterns, key=lambda pattern: sum(abs(a - b) for a, b in zip(pattern, cell, strict=True)))
+            found.append(patterns[nearest])
+        return found
 
     return look
 
 
-def spot_reader(image: QImage, corner: QPointF, side: int, ratio: int) -> Callable[[float, float], QColor]:
-    """Colours of a cell by fractions of its width and height."""
-
-    def at(x: float, y: float) -> QColor:
-        return image.pixelColor(int((corner.x() + x * side) * ratio), int((corner.y() + y * side) * ratio))
-
-    return at
-
-
 def in_order(array: Array) -> list[State]:
-    """The states that a plan asks for, in reading order."""
+    """The states that a plan asks for, in the order of filling."""
     return [state for state in STATES for _ in range(getattr(array, state))]
 
 
-@pytest.mark.parametrize("denominator", EXPECTED)
+@pytest.mark.parametrize("denominator", [100, 1_000])
 @pytest.mark.parametrize("group", ["without", "with_"])
 def test_every_icon_is_painted_as_planned(seen: Callable[..., list[State]], denominator: int, group: str) -> None:
     """Each cell of the grid holds the planned state: the affected as one block from the same corner, nobody missing."""
@@ -91,10 +79,27 @@ def test_every_icon_is_painted_as_planned(seen: Callable[..., list[State]], deno
     assert seen(array, denominator) == in_order(array)
 
 
-@pytest.mark.parametrize("array", [plan(0.05, 0.23).with_, plan(0.0, 1.0).with_, plan(0.0, 1.0).without])
-def test_added_all_and_none_are_painted_as_planned(seen: Callable[..., list[State]], array: Array) -> None:
-    """Added icons, an array of one state, and one of nobody affected."""
-    assert seen(array, 100) == in_order(array)
+def test_ten_thousand_icons_are_painted_as_planned(seen: Callable[..., list[State]]) -> None:
+    """The largest array too, icon by icon."""
+    array = EXPECTED[10_000].with_
+    assert EXPECTED[10_000].denominator == 10_000
+    assert seen(array, 10_000) == in_order(array)
+
+
+@pytest.mark.parametrize("icons", ICONS)
+@pytest.mark.parametrize(
+    "array",
+    [
+        plan(0.05, 0.23).with_,
+        plan(0.0, 1.0).with_,
+        plan(0.0, 1.0).without,
+        plan(0.12, 0.06, 0.04, 0.09).with_,
+        plan(0.05, 0.23, 0.11, 0.37).with_,
+    ],
+)
+def test_every_state_is_painted_as_planned(seen: Callable[..., list[State]], array: Array, icons: Icons) -> None:
+    """Added and uncertain icons, arrays of one state and of nobody affected, in people, blocks and dots."""
+    assert seen(array, 100, icons=icons) == in_order(array)
 
 
 @pytest.mark.parametrize("ratio", [1, 2])
@@ -104,18 +109,98 @@ def test_dark_and_sharp_screens_show_the_same(seen: Callable[..., list[State]], 
     assert seen(array, 100, DARK, ratio) == in_order(array)
 
 
+@pytest.mark.parametrize("scale", [1.25, 1.5, 1.7])
+@pytest.mark.parametrize("denominator", [100, 1_000])
+def test_tiles_are_as_sharp_as_single_icons(sheet: Callable[..., object], scale: float, denominator: int) -> None:
+    """At broken scales too an array of copies is nearly the one of icons drawn one by one, and nothing is missing."""
+    array = EXPECTED[denominator].with_
+    laid = lay_array(denominator, 400, SIDE[denominator])
+    images = []
+    for copied in (True, False):
+        with sheet(420, 420, LIGHT.page) as (image, painter):
+            painter.setRenderHint(QPainter.RenderHint.Antialiasing)
+            painter.scale(scale, scale)
+            if copied:
+                draw_array(painter, QPointF(0, 0), array, laid, LIGHT)
+            else:
+                for state, start, stop in array.runs():
+                    for icon in range(start, stop):
+                        column, row = laid.grid.place(icon)
+                        draw_icon(painter, QRectF(laid.x(column), laid.y(row), laid.across, laid.down), state, LIGHT)
+        images.append(shades(image))
+    inked = [sum(251 - shade for shade in image if shade < 251) for image in images]
+    assert inked[0] == pytest.approx(inked[1], rel=0.05)
+
+
+@pytest.mark.parametrize("icons", ICONS)
 @pytest.mark.parametrize("denominator", GRIDS)
-def test_the_height_keeps_icons_square(denominator: int) -> None:
-    """An array is as tall as square icons make it."""
-    grid = GRIDS[denominator]
-    assert array_height(denominator, 10 * grid.width) == pytest.approx(10 * grid.height)
+def test_icons_keep_their_proportions(denominator: int, icons: Icons) -> None:
+    """A hundred people stand in cells of their own shape; all other icons are square."""
+    laid = lay_array(denominator, 600, 26, icons)
+    shape = TALL[icons] if denominator == 100 else 1.0
+    assert laid.down == pytest.approx(laid.across * shape, abs=0.5)
 
 
-@pytest.mark.parametrize(("risk", "share"), [(0.0, 0.0), (0.06, 0.24), (0.25, 1.0)])
-def test_a_bar_is_as_long_as_its_risk(sheet: Callable[..., object], risk: float, share: float) -> None:
-    """On a scale up to 25%, 6% fills 24% of the bar's length."""
+def test_a_pdf_holds_lines_and_no_copies() -> None:
+    """On paper every icon is drawn, not copied: there is no image in the file."""
+    buffer = QBuffer()
+    buffer.open(QBuffer.OpenModeFlag.WriteOnly)
+    writer = QPdfWriter(buffer)
+    painter = QPainter(writer)
+    painter.scale(writer.resolution() / 96, writer.resolution() / 96)
+    draw_array(painter, QPointF(0, 0), EXPECTED[100].with_, lay_array(100, 300, 26), LIGHT)
+    painter.end()
+    assert b"/Subtype /Image" not in buffer.data().data()
+    assert buffer.size() > 2_000
+
+
+def test_an_svg_holds_every_icon(tmp_path: Path) -> None:
+    """A drawing of lines has a path at least for each of a hundred people, and no picture of dots."""
+    generator = QSvgGenerator()
+    file = tmp_path / "array.svg"
+    generator.setFileName(str(file))
+    painter = QPainter(generator)
+    draw_array(painter, QPointF(0, 0), EXPECTED[100].with_, lay_array(100, 300, 26), LIGHT)
+    painter.end()
+    text = file.read_text(encoding="utf-8")
+    assert text.count("<path") >= 100
+    assert "<image" not in text
+
+
+def painted(sheet: Callable[..., object], bar: Bar) -> list[bool]:
+    """Where the middle of a bar from x = 20 to 220 has the accent's colour."""
     with sheet(240, 40, LIGHT.page) as (image, painter):
-        draw_bar(painter, QRectF(20, 10, 200, 18), risk, 0.25, LIGHT)
-    filled = [x for x in range(240) if near(image.pixelColor(x, 19), LIGHT.accent)]
+        draw_bar(painter, QRectF(20, 10, 200, 18), bar, LIGHT)
+    accent = QColor(LIGHT.accent)
+    return [image.pixelColor(x, 19) == accent for x in range(240)]
+
+
+@pytest.mark.parametrize("share", [0.0, 0.24, 1.0])
+def test_a_bar_is_as_long_as_its_share(sheet: Callable[..., object], share: float) -> None:
+    """A quarter of the scale fills a quarter of the bar, from its left end."""
+    filled = [x for x, accent in enumerate(painted(sheet, Bar(length=share))) if accent]
     assert len(filled) == pytest.approx(200 * share, abs=1)
     assert not filled or filled[0] == 20
+
+
+def test_somebody_is_never_drawn_as_nobody(sheet: Callable[..., object]) -> None:
+    """A risk too small for a pixel still has one; no risk has none."""
+    assert any(painted(sheet, Bar(length=0.00001)))
+    assert not any(painted(sheet, Bar(length=0.0)))
+
+
+def test_an_interval_is_hatched_about_the_end_of_its_bar(sheet: Callable[..., object]) -> None:
+    """Solid to the lower limit, hatched to the upper one, with a mark at the estimate that is higher than the bar."""
+    with sheet(240, 40, LIGHT.page) as (image, painter):
+        draw_bar(painter, QRectF(20, 10, 200, 18), Bar(length=0.5, low=0.25, high=0.75), LIGHT)
+    accent = QColor(LIGHT.accent)
+
+    def share(left: int, right: int) -> float:
+        spots = [image.pixelColor(x, y) == accent for x in range(left, right) for y in range(13, 26)]
+        return sum(spots) / len(spots)
+
+    assert share(22, 68) == 1
+    assert 0.1 < share(72, 116) < 0.9
+    assert 0.1 < share(124, 168) < 0.9
+    assert share(174, 216) == 0
+    assert [x for x in range(240) if image.pixelColor(x, 8) == accent] == pytest.approx([119, 120, 121], abs=1)

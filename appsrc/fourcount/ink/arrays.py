@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from functools import lru_cache
 
-from PySide6.QtCore import QPointF, QRectF, Qt
-from PySide6.QtGui import QBrush, QColor, QPainter, QPen, QPixmap
+from PySide6.QtCore import QLineF, QPointF, QRectF, Qt
+from PySide6.QtGui import QColor, QPainter, QPen, QPixmap
 
 from fourcount.ink.palette import Palette
 from fourcount.ink.people import draw_icon, is_vector
@@ -14,6 +14,9 @@ from fourcount.picture.bar_pair import Bar
 from fourcount.picture.grid import GRIDS, Laid, lay
 from fourcount.picture.options import Icons
 from fourcount.picture.plan import Array, State
+
+HATCH = 5
+"""How far the slanted lines of an interval stand apart."""
 
 
 def lay_array(denominator: int, width: float, most: float, icons: Icons = "person") -> Laid:
@@ -103,11 +106,23 @@ def draw_bar(painter: QPainter, area: QRectF, bar: Bar, palette: Palette) -> Non
     if bar.low is None or bar.high is None:
         return
     open_part = _stretch(area, bar.low, bar.high)
-    painter.fillRect(open_part, QBrush(accent, Qt.BrushStyle.BDiagPattern))
+    _hatch(painter, open_part, accent)
     painter.setPen(QPen(accent, 1))
     painter.drawRect(open_part.adjusted(0.5, 0.5, -0.5, -0.5))
     end = area.left() + area.width() * bar.length
     painter.fillRect(QRectF(end - 1.5, area.top() - 3, 3, area.height() + 6), accent)
+
+
+def _hatch(painter: QPainter, area: QRectF, colour: QColor) -> None:
+    """Slanted lines of our own: a brush's pattern has another size on every device."""
+    painter.save()
+    painter.setClipRect(area)
+    painter.setPen(QPen(colour, 1.2))
+    x = area.left()
+    while x < area.right() + area.height():
+        painter.drawLine(QLineF(x, area.top(), x - area.height(), area.bottom()))
+        x += HATCH
+    painter.restore()
 
 
 def _stretch(area: QRectF, start: float, stop: float) -> QRectF:

@@ -22,6 +22,9 @@ FINE_FROM = 26.0
 LINE = 1.15
 """The thinnest line that still has its colour."""
 
+FILLED_EDGE = 0.6
+"""A filled icon's edge, as a part of the line: with it, it is nearly as large as a hollow one."""
+
 PAPER_SCALE = 2.0
 """Paper and drawings of lines are taken to be as sharp as a screen of twice the usual pixels."""
 
@@ -69,6 +72,7 @@ def _draw_state(painter: QPainter, state: State, palette: Palette, icons: Icons,
     accent, plain = QColor(palette.accent), QColor(palette.outline)
     if state == "affected":
         painter.fillPath(outline, accent)
+        painter.strokePath(outline, QPen(accent, line * FILLED_EDGE))
     elif state == "others":
         painter.strokePath(outline, QPen(plain, line))
     elif state == "avoided":
@@ -109,6 +113,6 @@ def _plus(icons: Icons) -> QPainterPath:
 
 def _lower_half(icons: Icons) -> QPainterPath:
     path = QPainterPath()
-    top = 0.73 if icons == "person" else 0.5
+    top = 0.78 if icons == "person" else 0.5
     path.addRect(QRectF(0, top, 1, TALL[icons] - top))
     return path
