@@ -85,4 +85,6 @@ def _from_hazards(hazard_ratio: float, overall: float, share: float) -> float | 
     whole = -math.log1p(-overall)
     # The hazard of all lies between that of the unexposed and that of the exposed.
     low, high = sorted((whole, min(whole / hazard_ratio, _MOST)))
-    return -math.expm1(-increasing_root(curve, low * (1.0 - 1e-9), high * (1.0 + 1e-9), whole))
+    start = -math.expm1(-increasing_root(curve, low * (1.0 - 1e-9), high * (1.0 + 1e-9), whole))
+    # So near to everybody that no digit is left to carry the effect from.
+    return start if start < 1.0 else Gap("beyond-one")
