@@ -101,7 +101,7 @@ def test_a_letter_of_a_welcome_event_speaks_of_the_event() -> None:
     )
     text = letter(outcome)
     assert (
-        "Of 100 people in the reference group 40 healed, of 100 in the index group 47 (95% interval 37 to 60): "
+        "Of 100 people in the reference group 40 healed, of 100 in the index group 47 (95% interval 37 to 61): "
         "7 more in 100 (95%" in text
     )
     assert "NNTB at this starting risk" in text

@@ -88,9 +88,9 @@ def change_limits(difference: Figure, people: int) -> str:
 
 
 def risk_limits(figure: Figure, people: int) -> str:
-    """``4 to 9`` people with the event, or "" where there is no interval."""
+    """``4 to 9`` people with the event, or "" where there is no estimate or no interval."""
     interval = figure.interval
-    if isinstance(interval, Gap):
+    if isinstance(interval, Gap) or isinstance(figure.estimate, Gap):
         return ""
     return numbers.TO.join(_end(limit, people) for limit in (interval.low, interval.high))
 

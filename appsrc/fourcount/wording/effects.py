@@ -40,9 +40,14 @@ def carried_name(outcome: Outcome, patient: PatientFindings) -> str:
 
 def kept_constant(outcome: Outcome, patient: PatientFindings) -> str:
     """``risk ratio 0.54 (0.37 to 0.78) kept constant``."""
+    value, interval = value_and_limits(outcome, patient)
+    return f"{carried_name(outcome, patient)} {value}{limits.bracketed(interval)} kept constant"
+
+
+def value_and_limits(outcome: Outcome, patient: PatientFindings) -> tuple[str, str]:
+    """The effect that was carried and its interval, which is "" where there is none."""
     value, interval = _texts(outcome, patient.effect, patient.carried, adjusted=patient.adjusted)
-    shown = "" if isinstance(patient.carried.interval, Gap) else limits.bracketed(interval)
-    return f"{carried_name(outcome, patient)} {value}{shown} kept constant"
+    return value, "" if isinstance(patient.carried.interval, Gap) else interval
 
 
 def _texts(outcome: Outcome, effect: CarriedEffect, figure: Figure, *, adjusted: bool) -> tuple[str, str]:

@@ -82,9 +82,10 @@ LIMITS = (
     "Of clusters only the design effect is known here: a paper’s own model may say more.",
     "Intervals hold the play of small numbers only: not bias, losses to follow-up or mistakes of measurement.",
     "Carried to a patient, an effect is assumed to be the same at that starting risk as in the study.",
+    "Carried to another time span, both groups’ hazards are assumed to stay constant.",
     "A survey has no number needed to treat.",
     "A case-control study has only its odds ratio, unless a starting risk is typed from elsewhere.",
-    "A matched case-control study has only the odds ratio of its pairs.",
+    "A matched case-control study has only its pairs’ odds ratio, unless a starting risk is typed from elsewhere.",
     "No figure here says what to do: that takes all the evidence, what a person values, and judgement.",
 )
 """What the program leaves out, in whole sentences."""

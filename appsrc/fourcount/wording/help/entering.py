@@ -60,6 +60,25 @@ ENTERING = (
         ),
     ),
     (
+        "starting risk",
+        (
+            "A risk, such as 12% or 12 in 100; with its limits, 12% (9 to 15); or counts, 24 of 200. A rate is typed as "
+            "12 per 1,000 person-years or 1.2% per year, and becomes a risk over the time span. An overall risk goes "
+            "with the share of people who have the exposure."
+        ),
+    ),
+    (
+        "another time span",
+        "A span such as 5 years or 30 days. The study’s own time span has to be typed as one too.",
+    ),
+    (
+        "your own line",
+        (
+            "A difference, such as 5 fewer per 100, or a ratio, such as 0.8, with its side. It may be the smallest "
+            "difference that matters or a margin."
+        ),
+    ),
+    (
         "what the paper prints",
         (
             "Type or paste the paper’s own result, such as “0.54 (0.37 to 0.78), p = 0.001”, and see whether it "

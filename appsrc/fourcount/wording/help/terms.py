@@ -97,6 +97,52 @@ TERMS = (
         ),
     ),
     (
+        "effect used, kept constant",
+        (
+            "What the study tells of the effect, taken as the same at the patient’s starting risk: the risk ratio in "
+            "a trial, and elsewhere the effect that the paper prints after adjustment, where it is typed. A hazard "
+            "ratio, an odds ratio or the difference can be chosen instead. Each gives other figures the farther the "
+            "starting risk is from the study’s; only odds, hazards and rates never lead past 100%."
+        ),
+    ),
+    (
+        "low, usual, high",
+        (
+            "Three starting risks side by side, such as those of people with few, some and many causes for the event. "
+            "All three are counted among the same number of people."
+        ),
+    ),
+    (
+        "an overall risk, the share exposed",
+        (
+            "A register often tells the risk of everybody, exposed or not. The risk of those who are not exposed is "
+            "worked out from it, from the share who are exposed, and from the effect."
+        ),
+    ),
+    (
+        "another time span",
+        (
+            "Risks of the study’s 12 months are carried to 5 years as if the hazard in each group stayed as it was. "
+            "Both risks are carried and then compared, since no ratio or difference stays the same by itself."
+        ),
+    ),
+    (
+        "what the interval holds",
+        (
+            "At the study’s own starting risk it is the study’s own interval. At a starting risk typed with limits or "
+            "counts it holds the imprecision of both the starting risk and the effect. At a bare starting risk it "
+            "holds that of the effect only."
+        ),
+    ),
+    (
+        "the smallest difference that matters, a margin",
+        (
+            "A line of your own on a measure. The smallest difference that would matter to a patient is drawn, and one "
+            "sentence says on which side of it the interval lies. A margin, as a trial of non-inferiority sets it "
+            "beforehand, has a one-sided p as well."
+        ),
+    ),
+    (
         "avoided, added, on balance",
         (
             "How many fewer, or more, people in the picture have the event with the index treatment. Only the balance "

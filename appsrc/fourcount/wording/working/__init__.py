@@ -16,12 +16,13 @@ from fourcount.wording.sentence import measure_sentence, p_sentence
 from fourcount.wording.working.extras import extra_rows
 from fourcount.wording.working.pairs import pair_rows, pair_test_rows
 from fourcount.wording.working.parts import METHOD_MEASURES, Row, Working
+from fourcount.wording.working.patient import PATIENT, patient_working
 from fourcount.wording.working.person_time import rate_rows, rate_test_rows
 from fourcount.wording.working.printed import effect_rows, timed_rows
 from fourcount.wording.working.strata import strata_rows, strata_test_rows
 from fourcount.wording.working.unpaired import formula_with_numbers, test_rows, unpaired_rows
 
-__all__ = ["METHOD_MEASURES", "TEST", "Row", "Working", "formula_with_numbers", "working"]
+__all__ = ["METHOD_MEASURES", "PATIENT", "TEST", "Row", "Working", "formula_with_numbers", "working"]
 
 TEST = "test"
 TEST_TITLE = "p value"
@@ -48,7 +49,9 @@ TEST_ROWS: Mapping[Form, Callable[[OutcomeFindings], tuple[Row, ...]]] = Mapping
 
 
 def working(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> Working:
-    """The working of a line by its key, or of the p values where ``measure`` is "test"."""
+    """The working of a line by its key, of the p values where ``measure`` is "test", of a patient where "patient"."""
+    if measure == PATIENT:
+        return patient_working(outcome, findings, choices)
     if measure == TEST:
         rows_of = TEST_ROWS.get(findings.form, test_rows)
         return Working(title=TEST_TITLE, sentence=p_sentence(findings), rows=rows_of(findings))

@@ -20,8 +20,10 @@ from fourcount.appraisal.findings import (
 from fourcount.record.outcome import Form
 from fourcount.record.paper import USUAL_LEVEL, Choices
 from fourcount.stats.attributable import levin, levin_interval
+from fourcount.stats.entries.carrying import CARRYING
 from fourcount.stats.entries.entry import Calculation
 from fourcount.stats.entries.extras import EXTRAS
+from fourcount.stats.entries.margins import MARGINS
 from fourcount.stats.entries.recovery import RECOVERIES
 from fourcount.stats.recovery import approximate_from_p, approximate_p
 from fourcount.wording import limits, numbers
@@ -31,7 +33,7 @@ from fourcount.wording.numbers import plain, quantity, whole
 from fourcount.wording.printed import PER_UNIT
 from fourcount.wording.working.parts import ESTIMATE, OTHER_METHODS, SPACE, Row, about, interval_words
 
-CALCULATIONS: dict[str, Calculation] = {entry.key: entry for entry in (*EXTRAS, *RECOVERIES)}
+CALCULATIONS: dict[str, Calculation] = {entry.key: entry for entry in (*EXTRAS, *RECOVERIES, *CARRYING, *MARGINS)}
 ENTRIES = {
     "attributable_exposed": "attributable-exposed",
     "prevented_exposed": "prevented-exposed",
