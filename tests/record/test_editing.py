@@ -10,6 +10,7 @@ from hypothesis import given
 from hypothesis import strategies as st
 
 from fourcount.record import editing
+from fourcount.record.characters import UNHELD
 from fourcount.record.entry.readings import Proportion
 from fourcount.record.entry.risk import read_risk
 from fourcount.record.entry.table import read_table
@@ -109,20 +110,40 @@ def test_only_text_fields_take_text(field: str) -> None:
         editing.edit_text(OUTCOME, field, "new")
 
 
+@given(st.text(st.characters(exclude_categories=("Cc", "Cs", "Cf"))))
+def test_text_stays_as_it_was_typed(text: str) -> None:
+    """Whatever can be seen is kept as it is."""
+    assert editing.edit_text(OUTCOME, "name_text", text).name_text == text
+
+
 @given(st.text(st.characters(exclude_categories=())))
 def test_any_text_can_be_kept_and_saved(text: str) -> None:
-    """Text stays as typed but for lone surrogates, which no file can hold."""
+    """What no file holds becomes the mark of a missing character in place; all else stays, and twice is once."""
     kept = editing.edit_text(OUTCOME, "name_text", text).name_text
     kept.encode()
-    assert kept == "".join("\ufffd" if "\ud800" <= character <= "\udfff" else character for character in text) or (
-        kept == text.encode("utf-16", "surrogatepass").decode("utf-16", "replace")
-    )
+    assert not UNHELD.search(kept)
+    assert editing.edit_text(OUTCOME, "name_text", kept).name_text == kept
+    whole = text.encode("utf-16-le", "surrogatepass").decode("utf-16-le", "replace")
+    assert len(kept) == len(whole)
+    assert all(one in (other, " ", "\ufffd") for one, other in zip(kept, whole, strict=True))
 
 
-def test_a_lone_surrogate_becomes_the_mark_of_a_missing_character() -> None:
-    """Half a character is shown as missing, in place; long text is not cut."""
-    assert editing.edit_text(OUTCOME, "name_text", "a\ud800b").name_text == "a\ufffdb"
-    assert editing.edit_text(OUTCOME, "first_left_text", "9" * 10_000).table.first_left_text == "9" * 10_000
+@pytest.mark.parametrize(
+    ("typed", "kept"),
+    [
+        ("a\ud800b", "a\ufffdb"),
+        ("a\ud83d\ude00b", "a\U0001f600b"),
+        ("38\x0c", "38 "),
+        ("a\u202e12", "a\ufffd12"),
+        ("a\x00b", "a\ufffdb"),
+        ("a\tb\nc", "a\tb\nc"),
+        ("\u0663\u200f\u05d0", "\u0663\u200f\u05d0"),
+        ("9" * 10_000, "9" * 10_000),
+    ],
+)
+def test_what_no_file_holds_is_seen_to_be_missing(typed: str, kept: str) -> None:
+    """Halves of a character, controls and overrides of direction are shown as missing; long text is not cut."""
+    assert editing.edit_text(OUTCOME, "first_left_text", typed).table.first_left_text == kept
 
 
 def test_swapping_twice_is_nothing() -> None:

@@ -56,7 +56,11 @@ WHERE: tuple[Where, ...] = ("", "abstract", "text", "table", "figure", "suppleme
 CELLS = ("first_left_text", "first_right_text", "second_left_text", "second_right_text")
 
 
-class EventsAndOthers(msgspec.Struct, frozen=True, kw_only=True, tag="events-and-others"):
+class Print(msgspec.Struct, frozen=True, forbid_unknown_fields=True, tag_field="form"):
+    """What every form of print is: in a file it says its form, and holds nothing unknown."""
+
+
+class EventsAndOthers(Print, frozen=True, kw_only=True, tag="events-and-others"):
     """The print ``38 · 374``: in each group, people with the left outcome and with the right one."""
 
     first_left_text: str = ""
@@ -65,7 +69,7 @@ class EventsAndOthers(msgspec.Struct, frozen=True, kw_only=True, tag="events-and
     second_right_text: str = ""
 
 
-class EventsOfTotal(msgspec.Struct, frozen=True, kw_only=True, tag="events-of-total"):
+class EventsOfTotal(Print, frozen=True, kw_only=True, tag="events-of-total"):
     """The print ``38 of 412``: in each group, people with the left outcome (left) and all people (right)."""
 
     first_left_text: str = ""
@@ -74,7 +78,7 @@ class EventsOfTotal(msgspec.Struct, frozen=True, kw_only=True, tag="events-of-to
     second_right_text: str = ""
 
 
-class PercentOfTotal(msgspec.Struct, frozen=True, kw_only=True, tag="percent-of-total"):
+class PercentOfTotal(Print, frozen=True, kw_only=True, tag="percent-of-total"):
     """The print ``9.2% of 412``: in each group, the percentage with the left outcome (left) and all people (right)."""
 
     first_left_text: str = ""
@@ -83,7 +87,7 @@ class PercentOfTotal(msgspec.Struct, frozen=True, kw_only=True, tag="percent-of-
     second_right_text: str = ""
 
 
-class Pairs(msgspec.Struct, frozen=True, kw_only=True, tag="pairs"):
+class Pairs(Print, frozen=True, kw_only=True, tag="pairs"):
     """Counts of pairs: both sides had the left outcome, the first side only, the second side only, neither.
 
     They stand in the four cells in that order, as a two-by-two table of the first side (down) by the second (across)
@@ -96,7 +100,7 @@ class Pairs(msgspec.Struct, frozen=True, kw_only=True, tag="pairs"):
     second_right_text: str = ""
 
 
-class PersonTime(msgspec.Struct, frozen=True, kw_only=True, tag="person-time"):
+class PersonTime(Print, frozen=True, kw_only=True, tag="person-time"):
     """The print ``38 in 4,120 person-years``: in each group, events (left) and person-time (right), in one unit."""
 
     first_left_text: str = ""
@@ -106,7 +110,7 @@ class PersonTime(msgspec.Struct, frozen=True, kw_only=True, tag="person-time"):
     unit_text: str = ""
 
 
-class RiskAtTime(msgspec.Struct, frozen=True, kw_only=True, tag="risk-at-time"):
+class RiskAtTime(Print, frozen=True, kw_only=True, tag="risk-at-time"):
     """The print ``9% (6 to 12) at 2 years``: in each group, a risk (left) and its limits (right).
 
     A left cell may hold the limits as well. The time is the outcome's time span; an empty level is 95%.
@@ -119,14 +123,14 @@ class RiskAtTime(msgspec.Struct, frozen=True, kw_only=True, tag="risk-at-time"):
     limits_level_text: str = ""
 
 
-class EffectOnly(msgspec.Struct, frozen=True, kw_only=True, tag="effect-only"):
+class EffectOnly(Print, frozen=True, kw_only=True, tag="effect-only"):
     """The print ``OR 0.49 (0.32 to 0.75)`` without counts: the effect stands in the outcome's ``paper_text``.
 
     It is an adjusted one where ``adjusted_for_text`` says for what.
     """
 
 
-class Stratum(msgspec.Struct, frozen=True, kw_only=True):
+class Stratum(msgspec.Struct, frozen=True, kw_only=True, forbid_unknown_fields=True):
     """One of several tables of one outcome, with its label ("under 65")."""
 
     label_text: str = ""
@@ -136,7 +140,7 @@ class Stratum(msgspec.Struct, frozen=True, kw_only=True):
     second_right_text: str = ""
 
 
-class Strata(msgspec.Struct, frozen=True, kw_only=True, tag="strata"):
+class Strata(Print, frozen=True, kw_only=True, tag="strata"):
     """Several tables of one outcome, to be pooled; each row as ``38 · 374`` or, with ``of_total``, as ``38 of 412``."""
 
     strata: tuple[Stratum, ...] = (Stratum(), Stratum())
@@ -176,7 +180,7 @@ def form_of(table: Table) -> Form:
     return next(form for form, kind in FORMS.items() if type(table) is kind)
 
 
-class Patient(msgspec.Struct, frozen=True, kw_only=True):
+class Patient(msgspec.Struct, frozen=True, kw_only=True, forbid_unknown_fields=True):
     """Whom the effect is carried to.
 
     ``start_kind`` says how the starting risk is given: "one" risk (``starting_risk_text``, maybe with its own limits
@@ -200,7 +204,7 @@ class Patient(msgspec.Struct, frozen=True, kw_only=True):
     other_span_text: str = ""
 
 
-class Outcome(msgspec.Struct, frozen=True, kw_only=True):
+class Outcome(msgspec.Struct, frozen=True, kw_only=True, forbid_unknown_fields=True):
     """One table of a paper and what it counts.
 
     ``left_heading_text`` and ``right_heading_text`` name the two outcomes in the grid ("fell", "did not

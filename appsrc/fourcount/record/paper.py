@@ -16,14 +16,14 @@ HIGHEST_LEVEL = 0.999
 USUAL_LEVEL = 0.95  # of printed limits that say none: common practice
 
 
-class Choices(msgspec.Struct, frozen=True, kw_only=True):
+class Choices(msgspec.Struct, frozen=True, kw_only=True, forbid_unknown_fields=True):
     """How intervals are computed: the family, and the confidence level as a fraction (0.80 to 0.999)."""
 
     family: Family = "score"
     level: float = 0.95
 
 
-class Record(msgspec.Struct, frozen=True, kw_only=True):
+class Record(msgspec.Struct, frozen=True, kw_only=True, forbid_unknown_fields=True):
     """What the reader typed and chose for one paper."""
 
     title_text: str = ""

@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from msgspec.structs import replace
 
+from fourcount.record.characters import storable
 from fourcount.record.editing.forms import in_form
-from fourcount.record.editing.texts import storable
 from fourcount.record.entry.paste import read_paste
 from fourcount.record.entry.readings import Pasted
 from fourcount.record.outcome import CELLS, EventsAndOthers, EventsOfTotal, Outcome, Strata, Stratum

@@ -6,8 +6,9 @@ from typing import TYPE_CHECKING, Any
 
 from msgspec.structs import replace
 
+from fourcount.record.characters import storable
 from fourcount.record.editing.forms import in_form
-from fourcount.record.editing.texts import storable, typed_texts
+from fourcount.record.editing.texts import typed_texts
 from fourcount.record.outcome import (
     CELLS,
     PAIRED_DESIGNS,

@@ -7,6 +7,7 @@ from typing import TypeVar
 
 from msgspec.structs import fields, replace
 
+from fourcount.record.characters import storable
 from fourcount.record.outcome import CELLS, PAPER_MEASURES, EffectOnly, Outcome, Patient, Strata, Stratum
 from fourcount.record.paper import Record
 
@@ -60,11 +61,6 @@ def typed_texts(outcome: Outcome) -> tuple[str, ...]:
     else:
         cells = [getattr(outcome.table, field) for field in CELLS]
     return tuple(text for text in cells if text.strip())
-
-
-def storable(text: str) -> str:
-    """The text with each lone surrogate as U+FFFD: UTF-8, and so a file, cannot hold one."""
-    return text if text.isascii() else text.encode("utf-16-le", "surrogatepass").decode("utf-16-le", "replace")
 
 
 def one_of(value: Word, allowed: Container[object]) -> Word:

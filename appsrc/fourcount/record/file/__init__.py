@@ -1,0 +1,1 @@
+"""What stands between a file's bytes and a record: JSON read with care, formats, limits, refusals."""
