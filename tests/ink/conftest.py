@@ -12,6 +12,7 @@ from PySide6.QtWidgets import QApplication
 
 from fourcount.ink.palette import LIGHT, Palette
 from fourcount.ink.picture import KeyEntry, Picture, PictureWords, Side
+from fourcount.picture.options import USUAL, PictureOptions
 from fourcount.picture.plan import plan
 
 SIZES = {"body": 13, "small": 12, "strong": 13, "figure": 20}
@@ -66,19 +67,32 @@ def sheet() -> Callable[..., Iterator[tuple[QImage, QPainter]]]:
 def picture() -> Callable[..., Picture]:
     """Make a picture of two risks, with short words or with long ones."""
 
-    def make(without: float, with_: float, *, bars: bool = False, long: bool = False, note: str = "") -> Picture:
+    def make(
+        without: float,
+        with_: float,
+        *,
+        bars: bool = False,
+        long: bool = False,
+        note: str = "",
+        limits: tuple[float, float] | None = None,
+        options: PictureOptions = USUAL,
+    ) -> Picture:
         name = "a treatment with a name that goes on and on, twice a day with meals" if long else "usual care"
         words = PictureWords(
             without=Side(f"Without: {name}", "1,204 in 10,000", "(12.04%)", "8,796 did not have the event"),
             with_=Side("With: night lights", "6 in 100", "(6%)", "94 did not fall"),
             key=(
                 KeyEntry("affected", f"fell {name}"),
+                KeyEntry("added", "falls added, on balance"),
+                KeyEntry("uncertain", "left open by the interval"),
                 KeyEntry("avoided", "falls avoided, on balance"),
                 KeyEntry("others", "did not fall"),
             ),
             note=note,
             lines=("6 fewer in 100 fell", "range 3 to 8"),
+            bar_ends=("0", "25%"),
         )
-        return Picture(plan(without, with_), words, bars)
+        asked = options._replace(arrangement="bars") if bars else options
+        return Picture(plan(without, with_, *(limits or ())), words, asked)
 
     return make

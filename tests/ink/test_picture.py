@@ -9,7 +9,9 @@ from PySide6.QtGui import QColor, QImage
 
 from fourcount.ink.palette import DARK, LIGHT, PAPER
 from fourcount.ink.picture import Picture, as_image
+from fourcount.ink.shapes import TALL
 from fourcount.ink.typeset import text_height
+from fourcount.picture.options import ARRANGEMENTS, ICONS, Arrangement, Icons, PictureOptions
 
 WIDTHS = [150, 279, 280, 342, 600]
 RISKS = [(0.12, 0.06), (0.052, 0.047), (0.0015, 0.0008), (0.00001, 0.00002), (0.05, 0.23)]
@@ -27,7 +29,8 @@ def painted_rows(image: QImage, page: str) -> list[int]:
 @pytest.mark.parametrize("width", WIDTHS)
 @pytest.mark.parametrize("risks", RISKS, ids=str)
 @pytest.mark.parametrize("long", [False, True], ids=["short words", "long words"])
-@pytest.mark.parametrize("bars", [False, True], ids=["people", "bars"])
+@pytest.mark.parametrize("arrangement", ARRANGEMENTS)
+@pytest.mark.parametrize("captions", [True, False], ids=["captions", "bare"])
 def test_the_height_is_what_drawing_takes(
     sheet: Callable[..., object],
     style: Callable[..., object],
@@ -35,16 +38,107 @@ def test_the_height_is_what_drawing_takes(
     width: int,
     risks: tuple[float, float],
     long: bool,
-    bars: bool,
+    arrangement: Arrangement,
+    captions: bool,
 ) -> None:
-    """Measured and drawn height agree, and nothing is drawn below."""
-    it = picture(*risks, bars=bars, long=long, note="Each picture shows 1,000 people." if long else "")
+    """Measured and drawn height agree, and nothing is drawn below, in every arrangement."""
+    options = PictureOptions(arrangement=arrangement, captions=captions)
+    it = picture(*risks, options=options, long=long, note="Each picture shows 1,000 people." if long else "")
     look = style()
     height = it.height(look, width)
     with sheet(width, height + 60, LIGHT.page) as (image, painter):
         taken = it.draw(painter, look, 0, 0, width)
     assert height == round(taken)
     assert max(painted_rows(image, LIGHT.page)) <= height
+
+
+@pytest.mark.parametrize("icons", ICONS)
+@pytest.mark.parametrize("arrangement", ["two", "one"])
+@pytest.mark.parametrize("within", [240, 330, 500])
+def test_a_picture_keeps_to_a_height(
+    sheet: Callable[..., object],
+    style: Callable[..., object],
+    picture: Callable[..., Picture],
+    icons: Icons,
+    arrangement: Arrangement,
+    within: int,
+) -> None:
+    """Icons get smaller where the page has no more room, and no smaller than they must; the columns stay."""
+    it, look = picture(0.12, 0.06, options=PictureOptions(icons, arrangement)), style()
+    height = it.height(look, 800, within)
+    with sheet(800, 700, LIGHT.page) as (image, painter):
+        assert round(it.draw(painter, look, 0, 0, 800, within)) == height
+    assert max(painted_rows(image, LIGHT.page)) <= within
+    assert height <= within
+    rows = 10 * TALL[icons]  # one pixel more a cell would have made the array so much higher, gap and all
+    assert height == it.height(look, 800) or height > within - rows - 6
+
+
+def test_what_cannot_be_made_smaller_stays(style: Callable[..., object], picture: Callable[..., Picture]) -> None:
+    """Bars keep their height, whatever is asked."""
+    it = picture(0.12, 0.06, bars=True)
+    assert it.height(style(), 342, 10) == it.height(style(), 342)
+
+
+@pytest.mark.parametrize(
+    ("risks", "width", "columns"),
+    [
+        ((0.12, 0.06), 342, 2),
+        ((0.12, 0.06), 279, 1),
+        ((0.052, 0.047), 342, 1),
+        ((0.052, 0.047), 600, 2),
+        ((0.0015, 0.0008), 500, 1),
+        ((0.0015, 0.0008), 642, 2),
+    ],
+)
+def test_columns_say_where_the_arrays_stand(
+    sheet: Callable[..., object],
+    style: Callable[..., object],
+    picture: Callable[..., Picture],
+    risks: tuple[float, float],
+    width: int,
+    columns: int,
+) -> None:
+    """A page that sets its own heads finds each array's left edge, side by side or one under the other."""
+    it, look = picture(*risks, options=PictureOptions(captions=False)), style()
+    places = it.columns(look, width)
+    assert len({left for left, _ in places}) == columns
+    with sheet(width, it.height(look, width), LIGHT.page) as (image, painter):
+        it.draw(painter, look, 0, 0, width)
+    for left, wide in places:
+        assert left + wide <= width
+        first = [x for x in range(int(left), int(left + wide)) if image.pixelColor(x, 2) != QColor(LIGHT.page)]
+        assert first[0] - left <= 12
+
+
+def test_captions_are_left_to_the_page(style: Callable[..., object], picture: Callable[..., Picture]) -> None:
+    """Without captions the words of the groups take no room; key and note stay."""
+    look = style()
+    bare = picture(0.12, 0.06, options=PictureOptions(captions=False), note="Each picture shows 1,000 people.")
+    bare_but_long = picture(0.12, 0.06, options=PictureOptions(captions=False), note="")
+    assert bare.height(look, 342) < picture(0.12, 0.06, note="Each picture shows 1,000 people.").height(look, 342)
+    assert bare.height(look, 342) > bare_but_long.height(look, 342)
+
+
+def test_the_key_explains_what_is_drawn(picture: Callable[..., Picture]) -> None:
+    """Of all words that there are for states only those of the icons that are there are shown; bars have no key."""
+    assert [entry.state for entry in picture(0.12, 0.06).key] == ["affected", "avoided", "others"]
+    assert [entry.state for entry in picture(0.06, 0.12).key] == ["affected", "added", "others"]
+    assert [entry.state for entry in picture(0.12, 0.06, limits=(0.04, 0.09)).key] == [
+        "affected",
+        "uncertain",
+        "avoided",
+        "others",
+    ]
+    assert picture(0.12, 0.06, bars=True).key == ()
+
+
+def test_pictures_are_equal_where_they_are_drawn_alike(picture: Callable[..., Picture]) -> None:
+    """Plan, words and options make a picture; the same ones make the same."""
+    assert picture(0.12, 0.06) == picture(0.12, 0.06)
+    assert hash(picture(0.12, 0.06)) == hash(picture(0.12, 0.06))
+    others = [picture(0.12, 0.07), picture(0.12, 0.06, bars=True), picture(0.12, 0.06, options=PictureOptions("dot"))]
+    assert all(other != picture(0.12, 0.06) for other in others)
 
 
 @pytest.mark.parametrize("zoom", [0.8, 1.0, 2.0])
@@ -94,18 +188,18 @@ def test_what_is_too_small_to_draw_gets_bars(picture: Callable[..., Picture]) ->
     assert not picture(0.12, 0.06).bars
 
 
-def test_bars_share_one_scale(
+def test_bars_share_one_scale_and_begin_on_one_line(
     sheet: Callable[..., object], style: Callable[..., object], picture: Callable[..., Picture]
 ) -> None:
-    """Bars of 12% and 6%, side by side on a scale up to 25%, fill 48% and 24% of their lengths."""
+    """Bars of 12% and 6% on a scale up to 25%, one under the other, fill 48% and 24% of the width."""
     it = picture(0.12, 0.06, bars=True)
-    with sheet(628, it.height(style(), 628), LIGHT.page) as (image, painter):
-        it.draw(painter, style(), 0, 0, 628)
+    with sheet(400, it.height(style(), 400), LIGHT.page) as (image, painter):
+        it.draw(painter, style(), 0, 0, 400)
     accent = QColor(LIGHT.accent)
-    rows = [[x for x in range(628) if image.pixelColor(x, y) == accent] for y in range(image.height())]
-    longest = max(rows, key=len)
-    left, right = (sum(1 for x in longest if low <= x < high) for low, high in ((0, 314), (314, 628)))
-    assert (left, right) == (pytest.approx(0.48 * 300, abs=1), pytest.approx(0.24 * 300, abs=1))
+    rows = [[x for x in range(400) if image.pixelColor(x, y) == accent] for y in range(image.height())]
+    filled = [row for row in rows if len(row) > 40]
+    assert {row[0] for row in filled} == {0}
+    assert {len(row) for row in filled} == {round(0.48 * 400), round(0.24 * 400)}
 
 
 @pytest.mark.parametrize("palette", [LIGHT, DARK], ids=["light", "dark"])
