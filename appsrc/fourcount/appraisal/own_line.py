@@ -70,6 +70,7 @@ def _against(
         worse_side=(outcome.line_side == "fewer") == outcome.welcome,
         p=_p(key, figure, whole, value, outcome.line_side, level) if margin else None,
         method=(PRINTED if whole is None else SCORE) if margin else "",
+        level=level,
     )
 
 

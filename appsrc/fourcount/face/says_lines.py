@@ -2,7 +2,9 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Gap, OutcomeFindings
+from dataclasses import replace
+
+from fourcount.appraisal.findings import Gap, OutcomeFindings, OwnLine
 from fourcount.picture.scales import (
     Scale,
     difference_scale,
@@ -15,6 +17,7 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording.extras import extra_lines
 from fourcount.wording.lines import MeasureLine, measure_lines, told_once
+from fourcount.wording.own_line import mark_words
 from fourcount.wording.sentence import p_line
 
 Lines = tuple[MeasureLine, ...]
@@ -35,7 +38,7 @@ def shown_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices, *
 
     An adjusted effect was typed, so it stands among the measures whether or not the fold is open.
     """
-    every = measure_lines(outcome, findings, choices)
+    every = marked(measure_lines(outcome, findings, choices), findings)
     main = told_once(tuple(line for line in every if line.group == "main"))
     tested = not (isinstance(findings.test, Gap) and findings.test.key == "not-counts")
     typed = findings.extras.adjusted is not None
@@ -48,13 +51,23 @@ def shown_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices, *
     return shown, (*under, *(line for line in extras if line.key != ADJUSTED))
 
 
+def marked(lines: Lines, findings: OutcomeFindings) -> Lines:
+    """The lines with the reader's own line on the strip of the measure that it is drawn for."""
+    own = findings.line
+    if not isinstance(own, OwnLine):
+        return lines
+    return tuple(
+        replace(line, mark=own.value, mark_words=mark_words(own)) if line.key == own.measure else line for line in lines
+    )
+
+
 def scales_of(*parts: Lines) -> tuple[dict[str, Scale], set[str]]:
     """One scale for each kind of measure, and the keys of the rows that name its ends: its last in each part."""
     scales: dict[str, Scale] = {}
     last: set[str] = set()
     for kind, maker in SCALES.items():
         mine = [[line for line in part if line.kind == kind and not line.withheld] for part in parts]
-        values = [v for part in mine for line in part for v in (line.estimate_value, line.low, line.high)]
+        values = [v for part in mine for line in part for v in (line.estimate_value, line.low, line.high, line.mark)]
         known = [v for v in values if v is not None]
         if known:
             scales[kind] = maker(known)

@@ -1,4 +1,8 @@
-"""The drawn strip of a measure: its interval as a bar, its estimate as a dot, no effect as a dotted line."""
+"""The drawn strip of a measure: its interval as a bar, its estimate as a dot, no effect as a dotted line.
+
+A line of the reader's own is solid, in the colour of text, with a flag at its top: it cannot be taken for no effect, in
+grey as little as in colour.
+"""
 
 from __future__ import annotations
 
@@ -20,10 +24,12 @@ def draw_strip(
     estimate: float | None,
     low: float | None,
     high: float | None,
+    mark: float | None = None,
 ) -> None:
     """Draw one strip along the middle of ``area``; a limit beyond the scale's end is drawn as an arrow.
 
-    Bar and dot grow with the height of ``area``, and so with the text.
+    Bar and dot grow with the height of ``area``, and so with the text. ``mark`` is the reader's own line, drawn under
+    the dot and over the bar; beyond the scale's end it has no place.
     """
     unit = max(area.height() / HEIGHT, 1.0)
     middle = round(area.center().y()) + 0.5
@@ -36,6 +42,8 @@ def draw_strip(
         painter.drawLine(QLineF(x, area.top(), x, area.bottom()))
     if low is not None and high is not None:
         _draw_interval(painter, area, middle, scale.place(low), scale.place(high), palette.accent, unit)
+    if mark is not None and 0 <= scale.place(mark) <= 1:
+        _draw_mark(painter, _x(area, scale.place(mark)), area, palette, unit)
     if estimate is not None and 0 <= scale.place(estimate) <= 1:
         painter.setPen(Qt.PenStyle.NoPen)
         painter.setBrush(QColor(palette.page))
@@ -47,6 +55,21 @@ def draw_strip(
 
 def _x(area: QRectF, place: float) -> float:
     return area.left() + area.width() * place
+
+
+def _draw_mark(painter: QPainter, x: float, area: QRectF, palette: Palette, unit: float) -> None:
+    """A line over the strip's whole height with a flag that points away from it, to the side that has room."""
+    painter.setPen(QPen(QColor(palette.page), 4 * unit, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))
+    painter.drawLine(QLineF(x, area.top(), x, area.bottom()))
+    painter.setPen(QPen(QColor(palette.ink), 1.5 * unit, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))
+    painter.drawLine(QLineF(x, area.top(), x, area.bottom()))
+    size = 6 * unit if x + 6 * unit <= area.right() else -6 * unit
+    painter.setPen(Qt.PenStyle.NoPen)
+    painter.setBrush(QColor(palette.ink))
+    top = area.top()
+    painter.drawPolygon(
+        QPolygonF([QPointF(x, top), QPointF(x + size, top + abs(size) / 2), QPointF(x, top + abs(size))])
+    )
 
 
 def _draw_interval(

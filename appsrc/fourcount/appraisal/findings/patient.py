@@ -87,7 +87,7 @@ class OwnLine(msgspec.Struct, frozen=True, kw_only=True):
     side: "beyond" (wholly past the line), "short" (wholly on the side of no effect) or "across". For a margin, "short"
     means that the margin is not reached, which is non-inferiority where the side is the worse one. ``p`` is
     one-sided, of the hypothesis that the effect lies at the margin or beyond it (Miettinen and Nurminen's statistic
-    where there are counts), by the method ``method``; only a margin has one.
+    where there are counts), by the method ``method``; only a margin has one. ``level`` is that of the interval.
     """
 
     kind: Literal["matters", "margin"]
@@ -97,3 +97,4 @@ class OwnLine(msgspec.Struct, frozen=True, kw_only=True):
     worse_side: bool
     p: float | Gap | None = None
     method: str = ""
+    level: float = 0.95

@@ -18,7 +18,8 @@ class MeasureLine:
     """One measure's text, and the numbers of its drawn strip (None where there is nothing to draw).
 
     ``withheld`` is the reason for which the whole measure is not given, else "". While the table is
-    not whole, every text of a figure is empty. Rates have their strip's numbers in the unit that is shown.
+    not whole, every text of a figure is empty. Rates have their strip's numbers in the unit that is shown. ``mark`` is
+    the reader's own line on the strip, ``mark_words`` what it is.
     """
 
     key: str
@@ -33,6 +34,8 @@ class MeasureLine:
     low: float | None = None
     estimate_value: float | None = None
     high: float | None = None
+    mark: float | None = None
+    mark_words: str = ""
 
 
 def blank_line(key: str, name: str, group: LineGroup = "main") -> MeasureLine:

@@ -14,6 +14,7 @@ from fourcount.wording.form import lacking, measure_of
 from fourcount.wording.lines import measure_lines
 from fourcount.wording.sentence import measure_sentence, p_sentence
 from fourcount.wording.working.extras import extra_rows
+from fourcount.wording.working.own_line import own_line_rows
 from fourcount.wording.working.pairs import pair_rows, pair_test_rows
 from fourcount.wording.working.parts import METHOD_MEASURES, Row, Working
 from fourcount.wording.working.patient import PATIENT, patient_working
@@ -64,7 +65,7 @@ def working(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: 
     if lacking(findings):
         return Working(title=title, sentence=sentence, rows=())
     rows = ROWS.get(findings.form, unpaired_rows)(measure, outcome, findings, choices)
-    return Working(title=title, sentence=sentence, rows=rows)
+    return Working(title=title, sentence=sentence, rows=(*rows, *own_line_rows(measure, findings)))
 
 
 def _title(measure: str, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
