@@ -8,6 +8,7 @@ import pytest
 from PySide6.QtGui import QColor, QImage
 
 from fourcount.ink.palette import LIGHT
+from fourcount.ink.picture import Picture, as_image
 from fourcount.ink.relative_picture import RelativePicture
 from fourcount.picture.plan import plan
 from fourcount.picture.relative import relative_plan
@@ -88,3 +89,15 @@ def test_equal_pictures_are_equal(relative: Callable[..., RelativePicture]) -> N
     assert relative(0.12, 0.06) == relative(0.12, 0.06)
     assert hash(relative(0.12, 0.06)) == hash(relative(0.12, 0.06))
     assert relative(0.12, 0.06) != relative(0.12, 0.07)
+
+
+def test_a_copied_picture_takes_it_along(
+    style: Callable[..., object], picture: Callable[..., Picture], relative: Callable[..., RelativePicture]
+) -> None:
+    """On demand it follows the absolute picture on the same sheet, and everything else stays."""
+    it, look, wide = relative(0.12, 0.06), style(), 520 - 2 * 28
+    bare = as_image(picture(0.12, 0.06), look, "Falls", "Cautions.", scale=1)
+    both = as_image(picture(0.12, 0.06), look, "Falls", "Cautions.", scale=1, relative=it)
+    assert both.height() - bare.height() == pytest.approx(it.height(look, wide) + 16, abs=1)
+    above = round(picture(0.12, 0.06).height(look, wide)) + 28
+    assert both.copy(0, 0, 520, above) == bare.copy(0, 0, 520, above)

@@ -190,29 +190,41 @@ def test_the_relative_figure_comes_after_the_people(relative_of: Callable[..., R
     assert words.people.ends == ("0", "all 100")
     assert words.sounds.values == ("", "50% lower")
     assert words.sentence.index("6 fewer in 100") < words.sentence.index("50% lower")
-    assert words.sentence.startswith("In people: 12 in 100 without and 6 in 100 with")
+    assert words.sentence.startswith("In people: usual care 12 in 100, night lights 6 in 100, 6 fewer in 100")
 
 
 @pytest.mark.parametrize(
-    ("drawn", "relative", "full"),
+    ("drawn", "relative"),
     [
-        (Drawn(0.06, 0.12), "100% higher", "full length: the risk with"),
-        (Drawn(0.12, 0.12), "the same", "full length: the risk without"),
-        (Drawn(0.12, 0.0), "100% lower", "full length: the risk without"),
-        (Drawn(0.044, 0.056, 1_000), "27% higher", "full length: the risk with"),
-        (Drawn(0.95, 0.97), "2% higher", "full length: the risk with"),
+        (Drawn(0.06, 0.12), "100% higher"),
+        (Drawn(0.12, 0.12), "the same"),
+        (Drawn(0.12, 0.0), "100% lower"),
+        (Drawn(0.044, 0.056, 1_000), "27% higher"),
+        (Drawn(0.95, 0.97), "2% higher"),
     ],
 )
 def test_the_relative_figure_has_its_side(
-    relative_of: Callable[..., RelativeWords], drawn: Drawn, relative: str, full: str
+    relative_of: Callable[..., RelativeWords], drawn: Drawn, relative: str
 ) -> None:
-    """Lower, higher or the same, and which of the two risks the full bar stands for."""
+    """Lower, higher or the same; the full bar stands for the larger of the two risks."""
     words = relative_of(drawn)
     assert words.sounds.values[1] == relative
-    assert words.sounds.ends == ("0", full)
+    assert words.sounds.ends == ("0", "full length: the larger risk")
 
 
 def test_the_difference_is_that_of_the_risks(relative_of: Callable[..., RelativeWords]) -> None:
     """Of 4.4 and 5.6 in 100 it is 12 more in 1,000, not the 2 of the rounded icons; equal risks have none."""
     assert "12 more in 1,000" in relative_of(Drawn(0.044, 0.056, 1_000)).sentence
     assert "the same number" in relative_of(Drawn(0.12, 0.12)).sentence
+
+
+def test_a_study_before_and_after_names_its_times(
+    words_of: Callable[..., PictureWords], outcome_of: Callable[..., Outcome]
+) -> None:
+    """The same people at two times are not "with" and "without" anything."""
+    changes = {"design": "before-after", "first_label_text": "after", "second_label_text": "before"}
+    words = words_of(Drawn(0.12, 0.06), **changes)
+    assert (words.without.title, words.with_.title) == ("Before", "After")
+    relative = relative_words(outcome_of(**changes), Drawn(0.12, 0.06))
+    assert relative.people.labels == ("Before", "After")
+    assert relative.sentence.startswith("In people: before 12 in 100, after 6 in 100")

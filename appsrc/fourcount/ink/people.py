@@ -25,8 +25,8 @@ LINE = 1.15
 FILLED_EDGE = 0.6
 """A filled icon's edge, as a part of the line: with it, it is nearly as large as a hollow one."""
 
-PAPER_SCALE = 2.0
-"""Paper and drawings of lines are taken to be as sharp as a screen of twice the usual pixels."""
+PAPER_SCALE = 1.6
+"""Paper and drawings of lines are taken to be sharper than a screen of the usual pixels; people are 2 mm at least."""
 
 ON_SCREEN = (QPaintEngine.Type.Raster, QPaintEngine.Type.OpenGL2)
 

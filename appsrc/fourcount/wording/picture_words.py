@@ -12,17 +12,17 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import names, numbers, of_people
 from fourcount.wording.axis import axis_words
-from fourcount.wording.form import shown_choices
+from fourcount.wording.form import patient_choices
 from fourcount.wording.headline import choose
 from fourcount.wording.limits import interval_name
+from fourcount.wording.patient import LONGEST_KEY, WELCOME_DRAWN, titles
+from fourcount.wording.subject import subject
 
 KeyState = Literal["affected", "added", "uncertain", "avoided", "others"]
 
-LONGEST_KEY = 40
 TOO_SMALL = "Too small to draw as people."
 MORE_PEOPLE = "{picture} shows {people} people: fewer could not show these risks truly."
 EACH = {"two": "Each picture", "one": "The picture"}
-WELCOME_DRAWN = "Filled: people with the welcome outcome."
 BAR_END = "The bars run to {end}, not to 100%."
 EITHER_WAY = "{words} either way"
 OPEN = "left open by the interval"
@@ -125,14 +125,14 @@ def picture_words(
 ) -> PictureWords:
     """All words of a picture of two risks; ``bar_top`` is the risk at which its bars would be full."""
     people = people_of(drawn)
-    level = interval_name(shown_choices(findings, choices).level)
+    level = interval_name(patient_choices(findings, choices).level)
+    without_title, with_title = titles(outcome)
+    outcome = subject(outcome)
     other = said.other or _other_words(outcome, said)
-    without_title = said.without_title or f"Without: {names.label_within(outcome, 'reference')}"
-    with_title = said.with_title or f"With: {names.label_within(outcome, 'index')}"
     low, _, high = axis_words("risk", bar_top)
     return PictureWords(
-        without=_side(without_title, drawn.without_risk, people, other),
-        with_=_side(with_title, drawn.with_risk, people, other),
+        without=_side(said.without_title or without_title, drawn.without_risk, people, other),
+        with_=_side(said.with_title or with_title, drawn.with_risk, people, other),
         key=_key(outcome, asked, said),
         note=" ".join(part for part in _notes(outcome, drawn, asked, said, level, bar_top) if part),
         lines=(),

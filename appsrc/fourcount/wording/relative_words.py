@@ -6,15 +6,17 @@ from typing import NamedTuple
 
 from fourcount.record.outcome import Outcome
 from fourcount.wording import limits, names, numbers, of_people
+from fourcount.wording.patient import titles
 from fourcount.wording.picture_words import USUAL_WORDS, Drawn, Said, people_of
+from fourcount.wording.subject import subject
 
 IN_PEOPLE = "What it is in people"
 SOUNDS = "What the relative figure sounds like"
 THE_SAME = "the same"
 EVERYBODY = "all {people}"
-TAKEN_WHOLE = {True: "full length: the risk without", False: "full length: the risk with"}
+FULL = "full length: the larger risk"
 SENTENCE = (
-    "In people: {without} without and {with_} with, {difference}, drawn as bars of all {people} people. "
+    "In people: {reference} {without}, {index} {with_}, {difference}, drawn as bars of all {people} people. "
     "What the relative figure, {relative}, sounds like: the same two risks drawn as shares of the larger one."
 )
 
@@ -44,17 +46,21 @@ def relative_words(outcome: Outcome, drawn: Drawn, said: Said = USUAL_WORDS) -> 
         f"{of_people.affected(risk, people)} in {all_people}" for risk in (drawn.without_risk, drawn.with_risk)
     )
     without, with_ = counts
-    labels = (
-        said.without_title or f"Without: {names.label_within(outcome, 'reference')}",
-        said.with_title or f"With: {names.label_within(outcome, 'index')}",
-    )
+    without_title, with_title = titles(outcome)
+    labels = (said.without_title or without_title, said.with_title or with_title)
+    spoken = subject(outcome)
     relative = relative_change(drawn)
-    full = TAKEN_WHOLE[drawn.with_risk <= drawn.without_risk]
     return RelativeWords(
         people=Panel(IN_PEOPLE, labels, (without, with_), ("0", EVERYBODY.format(people=all_people))),
-        sounds=Panel(SOUNDS, labels, ("", relative), ("0", full)),
+        sounds=Panel(SOUNDS, labels, ("", relative), ("0", FULL)),
         sentence=SENTENCE.format(
-            without=without, with_=with_, difference=_difference(drawn, people), people=all_people, relative=relative
+            reference=names.label_within(spoken, "reference"),
+            index=names.label_within(spoken, "index"),
+            without=without,
+            with_=with_,
+            difference=_difference(drawn, people),
+            people=all_people,
+            relative=relative,
         ),
     )
 
