@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Gap, PatientFindings
+from fourcount.appraisal.findings import Gap, Interval, PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import USUAL_LEVEL, Choices
 from fourcount.wording import effects, names, spans, starts
@@ -11,6 +11,7 @@ AT_OWN_RISK = "At {own}"
 OWN_RANGE = "The interval is the study’s own."
 BOTH_RANGE = "The interval holds the imprecision of both the starting risk and the {effect}."
 EFFECT_RANGE = "The interval leaves out that {baseline} is itself uncertain."
+OVERALL_RANGE = "The interval takes the overall risk and the share of people exposed as certain."
 CONSTANT_RANGE = "A difference kept constant has the same interval at every starting risk."
 USUAL = Choices(level=USUAL_LEVEL)
 
@@ -20,12 +21,10 @@ def basis(outcome: Outcome, patient: PatientFindings, choices: Choices = USUAL) 
     withheld = isinstance(patient.carried.estimate, Gap)
     if starts.as_in_the_study(patient) or withheld:
         return f"{_own(outcome)}."
-    if patient.range_from == "table":
-        start, effect = f"{_own(outcome)} of {starts.value(patient)}", ""
-    elif starts.own(patient):
-        start, effect = f"{_own(outcome)} of {starts.value(patient)}", effects.kept_constant(outcome, patient)
-    else:
-        start, effect = starts.given(outcome, patient, choices), effects.kept_constant(outcome, patient)
+    start = starts.given(outcome, patient, choices)
+    if starts.own(patient):
+        start = f"{_own(outcome)} of {starts.value(patient)}{spans.of_the_start(patient)}"
+    effect = "" if patient.range_from == "table" else effects.kept_constant(outcome, patient)
     return f"{', '.join(part for part in (start, effect, spans.carried_to(patient)) if part)}."
 
 
@@ -36,9 +35,11 @@ def range_note(outcome: Outcome, patient: PatientFindings) -> str:
     if patient.range_from == "table":
         return OWN_RANGE
     if patient.effect == "risk_difference" and patient.other_span is None:
-        return CONSTANT_RANGE
+        return CONSTANT_RANGE if isinstance(patient.difference.interval, Interval) else ""
     if patient.range_from == "both":
         return BOTH_RANGE.format(effect=effects.carried_name(outcome, patient))
+    if patient.start_from == "overall":
+        return OVERALL_RANGE
     return EFFECT_RANGE.format(baseline=starts.value(patient))
 
 

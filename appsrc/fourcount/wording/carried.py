@@ -20,10 +20,13 @@ NOT_GIVEN = "not given"
 NO_CHANGE = "the same number"
 PASSES_ALL = "The risk would pass 100% here."
 CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
-FALLS_BELOW_NONE = "The risk would fall below 0% here: a difference cannot be kept constant at so low a starting risk."
+BELOW_NONE = ("beyond-zero", "carried-beyond-zero")
+FALLS_BELOW_NONE = "The risk would fall below 0% here."
+BELOW_BUT_ODDS = "The risk would fall below 0% here; the odds ratio can be carried instead."
 OPEN_ABOVE = "The upper limit of the risk would pass 100%, so the interval is open there."
 OPEN_ABOVE_BUT_ODDS = f"{OPEN_ABOVE.removesuffix('.')}; carrying the odds ratio avoids it."
 OPEN_BELOW = "The lower limit of the risk would fall below 0%, so the interval is open there."
+OPEN_BELOW_BUT_ODDS = f"{OPEN_BELOW.removesuffix('.')}; carrying the odds ratio avoids it."
 NEVER_PAST = ("odds_ratio", "hazard_ratio", "rate_ratio")
 """Effects that no starting risk takes past 100%."""
 
@@ -138,10 +141,10 @@ def odds_can_be_carried(findings: OutcomeFindings) -> bool:
 
 def reason(gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
     """Why something is withheld here; where a carried risk ratio passes 100%, odds never do."""
-    if patient.range_from == "table" or gap.key not in ("beyond-one", "beyond-zero"):
+    if patient.range_from == "table" or gap.key not in ("beyond-one", *BELOW_NONE):
         return gap_text(gap)
-    if gap.key == "beyond-zero":
-        return FALLS_BELOW_NONE
+    if gap.key in BELOW_NONE:
+        return BELOW_BUT_ODDS if _offered(patient, findings) else FALLS_BELOW_NONE
     return CARRY_THE_ODDS if _offered(patient, findings) else PASSES_ALL
 
 
@@ -159,8 +162,8 @@ def reasons(patient: PatientFindings, findings: OutcomeFindings) -> tuple[str, .
 def _reason_of_limit(gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
     if patient.range_from == "table":
         return limit_text(gap) if gap.key == "beyond-one" else gap_text(gap)
-    if gap.key == "beyond-zero":
-        return OPEN_BELOW
+    if gap.key in BELOW_NONE:
+        return OPEN_BELOW_BUT_ODDS if _offered(patient, findings) else OPEN_BELOW
     if gap.key == "beyond-one":
         return OPEN_ABOVE_BUT_ODDS if _offered(patient, findings) else OPEN_ABOVE
     return limit_text(gap)

@@ -11,7 +11,12 @@ from fourcount.wording.gaps import limit_text
 AnyInterval = Interval | Range | Gap
 
 ROUNDING = 1e-12
-WITHHELD_ENDS = {"beyond-one": "past 100%", "formula-beyond-one": "past 100%", "beyond-zero": "below 0%"}
+WITHHELD_ENDS = {
+    "beyond-one": "past 100%",
+    "formula-beyond-one": "past 100%",
+    "beyond-zero": "below 0%",
+    "carried-beyond-zero": "below 0%",
+}
 """Where a withheld limit would lie, by the reason; nobody is to read it as unlimited."""
 
 A_WITHHELD_LIMIT = "a withheld limit"

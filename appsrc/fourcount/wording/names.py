@@ -30,6 +30,10 @@ SIDES: dict[Design, dict[Position, str]] = {
 """What the sides of pairs are by their design; the grid calls them so too."""
 
 TIMES = ("before", "after", "during", "since", "at", "in", "on", "without", "with")
+PEOPLE = "people "
+WHO = "people who "
+"""A label that begins so stands behind "people" as it is."""
+
 EVENT_STAND_IN = "had the event"
 COLUMN_STAND_INS: dict[Column, str] = {"left": EVENT_STAND_IN, "right": "did not have the event"}
 """What an unnamed column says, whichever of the two is counted: print puts the events left (common practice)."""
@@ -92,6 +96,8 @@ def in_group(outcome: Outcome, group: Group) -> str:
         return f"among {within}"
     if not labelled(outcome, group):
         return f"in the {STAND_INS[group]}"
+    if within.lower().startswith(WHO):
+        return within[len(PEOPLE) :]
     if outcome.design in WITH_DESIGNS:
         return f"with {within}"
     return f"in the group “{label(outcome, group)}”"

@@ -13,7 +13,7 @@ from fourcount.wording.form import patient_choices
 from fourcount.wording.gaps import why_no_patient
 from fourcount.wording.headline import DO_NOT_ADD_UP
 from fourcount.wording.picture_sentence import WHICH_PEOPLE, others, picture_sentence
-from fourcount.wording.ranks import rank_lines
+from fourcount.wording.ranks import people_of, rank_lines
 from fourcount.wording.subject import subject
 
 __all__ = ["DO_NOT_ADD_UP", "WHICH_PEOPLE", "PatientWords", "missing", "patient_words", "picture_heading"]
@@ -69,7 +69,7 @@ def patient_words(
     if isinstance(patient, Gap):
         why = why_no_patient(patient, findings.form, next(iter(findings.measures), ""))
         return PatientWords(without_title=without_title, with_title=with_title, detail=why, missing=missing(outcome))
-    people = denominator or carried.denominator_for_text(patient)
+    people = denominator or people_of(patient)
     choices = patient_choices(findings, choices)
     change = patient.difference.estimate
     return PatientWords(
@@ -94,7 +94,7 @@ def patient_words(
         range_note=range_note(outcome, patient),
         who=starts.who(outcome, patient, people),
         scale="" if isinstance(change, Gap) else _scale(spoken, denominator),
-        ranks=rank_lines(findings, choices, people),
+        ranks=rank_lines(outcome, findings, choices, people_of(patient, people)),
         missing=missing(outcome),
         picture_sentence=picture_sentence(outcome, findings, patient, choices, people),
     )
@@ -106,6 +106,8 @@ def titles(outcome: Outcome) -> tuple[str, str]:
     if spoken.design == "before-after":
         labels = names.label(spoken, "reference"), names.label(spoken, "index")
         return names.sentence_case(labels[0]), names.sentence_case(labels[1])
+    if spoken is not outcome:
+        return names.sentence_case(names.label(spoken, "reference")), names.sentence_case(names.label(spoken, "index"))
     return f"Without: {names.label_within(spoken, 'reference')}", f"With: {names.label_within(spoken, 'index')}"
 
 

@@ -8,7 +8,7 @@ from fourcount.record.paper import Choices
 from fourcount.wording import carried, limits, names, numbers, of_people, spans, starts
 from fourcount.wording.basis import OWN_RANGE, range_note
 from fourcount.wording.form import patient_choices
-from fourcount.wording.ranks import rank_lines
+from fourcount.wording.ranks import people_of, rank_lines
 from fourcount.wording.subject import subject
 
 AS_IN_THE_STUDY = "The study’s figures hold as they stand."
@@ -20,8 +20,8 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
     if isinstance(patient, Gap):
         return ""
     choices = patient_choices(findings, choices)
-    people = carried.denominator_for_text(patient)
-    ranks = rank_lines(findings, choices, people)
+    people = people_of(patient)
+    ranks = rank_lines(outcome, findings, choices, people)
     if starts.as_in_the_study(patient):
         return " ".join((AS_IN_THE_STUDY, *ranks))
     if isinstance(patient.with_.estimate, Gap):
@@ -42,9 +42,9 @@ def _compared(outcome: Outcome, patient: PatientFindings, choices: Choices, peop
     spoken, change = subject(outcome), names.mid_sentence(carried.change(patient.difference, people))
     group, number = names.in_group(spoken, "index"), _people(patient.with_, choices, people)
     by_time = names.by_time(spoken)
-    second = f"{group} {number}" if by_time else f"of {numbers.whole(people)} {group} {number}"
+    second = f" and {number} {group}" if by_time else f", of {numbers.whole(people)} {group} {number}"
     interval = carried.interval(patient, choices, people)
-    return f"{_without(outcome, patient, choices, people)}, {second}: {change}{limits.bracketed(interval)}."
+    return f"{_without(outcome, patient, choices, people)}{second}: {change}{limits.bracketed(interval)}."
 
 
 def _without(outcome: Outcome, patient: PatientFindings, choices: Choices, people: int) -> str:

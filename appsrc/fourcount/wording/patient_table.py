@@ -11,6 +11,7 @@ from fourcount.wording import carried, limits, names, numbers, starts
 from fourcount.wording.form import patient_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.patient import titles
+from fourcount.wording.ranks import people_of
 
 START = "Starting {risk}"
 DIFFERENCE = "Difference"
@@ -59,12 +60,6 @@ def patient_table_head(
     counted = f", in {numbers.whole(people_of(patient, denominator))} ({level})"
     needed = f"{NUMBER_NEEDED} ({level})"
     return Row(start, f"{without}{counted}", f"{with_}{counted}", f"{DIFFERENCE}{counted}", needed)
-
-
-def people_of(patient: PatientFindings, denominator: int | None = None) -> int:
-    """The one number of people on which every row says what is so."""
-    found = [one for one in (patient, patient.low, patient.high) if isinstance(one, PatientFindings)]
-    return max(denominator or 0, *(carried.denominator_for_text(one) for one in found))
 
 
 def _row(rank: str, patient: PatientFindings | Gap, findings: OutcomeFindings, people: int) -> Row:

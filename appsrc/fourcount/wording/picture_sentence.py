@@ -19,7 +19,7 @@ def picture_sentence(
     first = _first(spoken, patient, people)
     if isinstance(patient.with_.estimate, Gap):
         reason = carried.reason(patient.with_.estimate, patient, findings)
-        return f"{first}. {names.sentence_case(names.in_group(spoken, 'index'))}: {reason}"
+        return f"{first}. {names.sentence_case(names.in_group(spoken, 'index'))}: {names.mid_sentence(reason)}"
     change = names.mid_sentence(carried.change(patient.difference, people))
     interval = carried.interval(patient, choices, people)
     said = f"{first}; {_second(spoken, patient, people)}: {change}"

@@ -7,7 +7,7 @@ from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Outcome
 from fourcount.wording import names, numbers
 
-CARRIED_TO = "carried{from_} to {other} as if hazards stayed constant"
+CARRIED_TO = "carried to {other} as if hazards stayed constant"
 
 
 def duration(span: Duration) -> str:
@@ -28,8 +28,10 @@ def within(outcome: Outcome, patient: PatientFindings) -> str:
 
 
 def carried_to(patient: PatientFindings) -> str:
-    """``carried from 12 months to 5 years as if hazards stayed constant``, or "" at the study's own span."""
-    if patient.other_span is None:
-        return ""
-    from_ = f" from {duration(patient.study_span)}" if patient.study_span else ""
-    return CARRIED_TO.format(from_=from_, other=duration(patient.other_span))
+    """``carried to 5 years as if hazards stayed constant``, or "" at the study's own span."""
+    return "" if patient.other_span is None else CARRIED_TO.format(other=duration(patient.other_span))
+
+
+def of_the_start(patient: PatientFindings) -> str:
+    """`` over 12 months`` behind a starting risk that is carried to another span, else ""."""
+    return f" over {duration(patient.study_span)}" if patient.other_span and patient.study_span else ""

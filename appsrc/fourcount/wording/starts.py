@@ -50,12 +50,11 @@ def named(patient: PatientFindings) -> str:
 def given(outcome: Outcome, patient: PatientFindings, choices: Choices) -> str:
     """``Starting risk 12% over 12 months (24 of 200, 95% interval 8.2 to 17.2%; a register)``."""
     what = " ".join(part for part in (RANKS.get(patient.rank, ""), "starting risk", value(patient)) if part)
-    at_span = f" over {spans.duration(patient.study_span)}" if patient.other_span and patient.study_span else ""
     source = names.bare(outcome.patient.starting_risk_source_text)
     reading = _reading(outcome, patient)
     precise = ", ".join(part for part in (_counted(reading), _interval(patient, reading, choices)) if part)
     inside = "; ".join(part for part in (_worked_out(outcome, patient), precise, source) if part)
-    return f"{names.sentence_case(what)}{at_span}{limits.bracketed(inside)}"
+    return f"{names.sentence_case(what)}{spans.of_the_start(patient)}{limits.bracketed(inside)}"
 
 
 def _worked_out(outcome: Outcome, patient: PatientFindings) -> str:

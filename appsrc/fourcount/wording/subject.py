@@ -9,6 +9,7 @@ from fourcount.wording import names
 
 BECAME_CASES = "became cases"
 DID_NOT = "did not"
+PEOPLE_WHO = "people who {exposed}"
 AMONG = "were among the “{cases}”"
 NOT_AMONG = "were not"
 
@@ -29,8 +30,9 @@ def subject(outcome: Outcome) -> Outcome:
     return msgspec.structs.replace(
         outcome,
         design="case-control",
-        first_label_text=with_ if by_case else without,
-        second_label_text=without if by_case else with_,
+        name_text="",
+        first_label_text=PEOPLE_WHO.format(exposed=with_ if by_case else without),
+        second_label_text=PEOPLE_WHO.format(exposed=without if by_case else with_),
         index_group="first",
         counted="left",
         left_heading_text="",
