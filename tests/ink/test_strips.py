@@ -31,6 +31,19 @@ def strip(sheet: Callable[..., object]) -> Strip:
     return paint
 
 
+@pytest.fixture
+def marked(sheet: Callable[..., object]) -> Strip:
+    """Paint an empty strip with a line of the reader's own."""
+
+    def paint(scale: Scale, mark: float | None) -> QImage:
+        with sheet(240, 40, LIGHT.page) as (image, painter):
+            area = QRectF(LEFT, TOP, RIGHT - LEFT, TALL)
+            draw_strip(painter, area, scale, LIGHT, None, None, None, mark)
+        return image
+
+    return paint
+
+
 def is_accent(image: QImage, x: int, y: int) -> bool:
     """Whether a pixel is nearer to the accent than to anything else that is drawn."""
     seen, accent = image.pixelColor(x, y), QColor(LIGHT.accent)
@@ -106,3 +119,43 @@ def test_a_risk_has_no_line_of_no_effect(strip: Strip) -> None:
     image = strip(risk_scale([0.25]), None, None, None)
     above = MIDDLE - 5
     assert all(image.pixelColor(x, above) == QColor(LIGHT.page) for x in range(240))
+
+
+def is_ink(image: QImage, x: int, y: int) -> bool:
+    """Whether a pixel is nearly as dark as text."""
+    return image.pixelColor(x, y).lightness() < QColor(LIGHT.ink).lightness() + 60
+
+
+def test_the_readers_own_line_is_solid_over_the_whole_height(marked: Strip) -> None:
+    """-5 points on a scale of -10 to 10 is marked at a quarter, from top to bottom, in the colour of text."""
+    image = marked(difference_scale([0.1]), -0.05)
+    column = [any(is_ink(image, x, y) for x in (69, 70, 71)) for y in range(TOP + 1, TOP + TALL - 1)]
+    assert all(column)
+
+
+def test_the_readers_own_line_has_a_flag(marked: Strip) -> None:
+    """The flag tells it from no effect in grey too; it turns round where it would leave the strip."""
+    image = marked(difference_scale([0.1]), -0.05)
+    assert is_ink(image, 73, TOP + 3)
+    assert not is_ink(image, 67, TOP + 3)
+    at_the_end = marked(difference_scale([0.1]), 0.1)
+    assert is_ink(at_the_end, RIGHT - 3, TOP + 3)
+    assert not is_ink(at_the_end, RIGHT + 3, TOP + 3)
+
+
+@pytest.mark.parametrize("mark", [None, 500.0, 0.0])
+def test_a_line_off_the_scale_is_not_drawn_on_it(marked: Strip, mark: float | None) -> None:
+    """No line is moved to an end where it does not belong."""
+    image = marked(ratio_scale([2.0]), mark)
+    page_like = [is_ink(image, x, TOP + 3) for x in range(240)]
+    assert not any(page_like)
+
+
+def test_the_bar_and_the_dot_stay_beside_the_line(sheet: Callable[..., object]) -> None:
+    """A line through the interval leaves it to be seen on both sides, and an estimate on the line keeps its dot."""
+    with sheet(240, 40, LIGHT.page) as (image, painter):
+        area = QRectF(LEFT, TOP, RIGHT - LEFT, TALL)
+        draw_strip(painter, area, difference_scale([0.1]), LIGHT, -0.05, -0.08, -0.02, -0.05)
+    assert is_accent(image, 70, MIDDLE)
+    assert is_accent(image, 50, MIDDLE)
+    assert is_accent(image, 90, MIDDLE)

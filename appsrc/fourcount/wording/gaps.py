@@ -106,6 +106,8 @@ GAP_TEXTS = {
     "undetermined-at-baseline": "An infinite effect says nothing at a starting risk of 0%, nor an odds ratio of 0 "
     "at one of 100%.",
     "bare-starting-risk": "The starting risk was typed without an interval of its own.",
+    "line-unreadable": "Your line cannot be read; 2 per 100 would do for a difference, 1.25 for a ratio.",
+    "line-scale-not-here": "There is no such measure here to draw your line on; choose another scale for it.",
     "formula-beyond-one": "The bare formula’s limit passes 100%, where no risk lies; the score intervals do not.",
     "formula-beyond-risks": "The bare formula’s limit parts the two risks farther than they can lie apart; "
     "the score intervals do not.",

@@ -79,6 +79,8 @@ GAP_KEYS = (
     "baseline-unreadable",  # the typed starting risk gives no risk
     "carried-gap",  # the effect to carry has no value
     "bare-starting-risk",  # the starting risk is a bare value without an interval of its own
+    "line-unreadable",  # the reader's own line cannot be read
+    "line-scale-not-here",  # this form has no measure on the scale of the reader's own line
     "formula-beyond-one",  # a limit of the bare textbook formula passes 100%, where no risk of a patient lies
     "formula-beyond-risks",  # a limit of the bare textbook formula parts two risks farther than they can lie apart
 )

@@ -47,9 +47,9 @@ class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
     ``without`` and ``with_`` are risks; ``without`` has an interval where the table's own reference group is the
     starting risk, or where the typed one has limits (else the Gap "bare-starting-risk"). ``difference`` is with minus
     without. ``range_from`` says what the range holds: "table" (the table's direct intervals), "effect" (the effect's
-    limits at a bare starting risk) or "both" (the imprecision of effect and starting risk propagated). ``risk_ratio`` is
-    the relative figure at this starting risk, whatever effect was carried. A figure from the effect names the effect's
-    method.
+    limits at a bare starting risk) or "both" (the imprecision of effect and starting risk propagated). ``risk_ratio``
+    is the relative figure at this starting risk, whatever effect was carried. A figure from the effect names the
+    effect's method.
 
     ``start_from`` says where the starting risk comes from, ``start_interval`` its own limits. ``study_span`` and
     ``other_span`` are the study's time span and the one carried to, where another was asked for. ``rank`` is "low",
