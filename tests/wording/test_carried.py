@@ -1,0 +1,376 @@
+"""A patient's words for every kind of effect, start and span, from findings built by hand: read them aloud."""
+
+from __future__ import annotations
+
+import msgspec
+import pytest
+
+from carried_patients import carried, effect, findings_with, with_counts
+from forms import at_time, effect_only, of_total, paired, person_time, strata
+from fourcount.appraisal.findings import Gap, Interval
+from fourcount.record.entry.readings import Duration
+from fourcount.record.outcome import Patient
+from fourcount.record.paper import Choices
+from fourcount.wording.basis import basis
+from fourcount.wording.patient import patient_words
+from fourcount.wording.patient_sentence import AS_IN_THE_STUDY, patient_sentence
+from fourcount.wording.patient_table import patient_table, patient_table_head
+
+RR, OR, HR = effect(0.54, 0.37, 0.78), effect(0.49, 0.32, 0.75), effect(0.72, 0.55, 0.92)
+UP, RD = effect(1.86, 1.29, 2.69), effect(-0.079, -0.126, -0.033)
+YEAR, FIVE_YEARS = Duration(value=12, unit="month"), Duration(value=5, unit="year")
+AT_OWN = {"baseline_from": "reference", "start_from": "reference"}
+ADJUSTED = {"design": "cohort", "adjusted_text": "OR 0.47 (0.30 to 0.72)", "adjusted_for_text": "age"}
+
+
+OVERALL = Patient(start_kind="overall", overall_risk_text="12%", exposed_share_text="30%")
+
+
+def typed(text="12%", **more):
+    return Patient(starting_risk_text=text, **more)
+
+
+def words_of(outcome, patient, *odds, denominator=100):
+    return patient_words(outcome, findings_with(outcome, patient, *odds), Choices(), denominator)
+
+
+BASES = [
+    (
+        "typed",
+        of_total(patient=typed(starting_risk_source_text="ward audit")),
+        carried("risk_ratio", RR, 0.12),
+        "Starting risk 12% (ward audit), risk ratio 0.54 (0.37 to 0.78) kept constant.",
+    ),
+    (
+        "counts",
+        of_total(patient=typed("24 of 200", starting_risk_source_text="ward audit")),
+        with_counts("risk_ratio", RR, 24, 200),
+        (
+            "Starting risk 12% (24 of 200, 95% interval 8.2 to 17.2%; ward audit), risk ratio 0.54 (0.37 to 0.78) kept "
+            "constant."
+        ),
+    ),
+    (
+        "limits at their own level",
+        of_total(patient=typed("12% (90% CI 9 to 15)")),
+        carried("risk_ratio", RR, 0.12, start_interval=Interval(low=0.09, high=0.15), range_from="both"),
+        "Starting risk 12% (90% interval 9 to 15%), risk ratio 0.54 (0.37 to 0.78) kept constant.",
+    ),
+    (
+        "rate",
+        person_time(patient=Patient(start_kind="rate", rate_text="12 per 1,000 person-years")),
+        carried("rate_ratio", RR, 0.1130795, start_from="rate", study_span=Duration(value=10, unit="year")),
+        (
+            "Starting risk 11.31% (from 12 per 1,000 person-years over 10 years), rate ratio 0.54 (0.37 to 0.78) kept "
+            "constant."
+        ),
+    ),
+    (
+        "overall",
+        of_total(design="cohort", patient=OVERALL),
+        carried("risk_ratio", RR, 0.139, start_from="overall"),
+        (
+            "Starting risk 13.9% (from an overall risk of 12%, 30% having the exposure), risk ratio 0.54 (0.37 to 0.78) "
+            "kept constant."
+        ),
+    ),
+    (
+        "adjusted at the study's own",
+        of_total(**ADJUSTED),
+        carried("odds_ratio", effect(0.47, 0.30, 0.72), 0.17115, adjusted=True, **AT_OWN),
+        "At the study’s own starting risk of 17.1%, adjusted odds ratio 0.47 (0.30 to 0.72) kept constant.",
+    ),
+    (
+        "another span",
+        effect_only(risk="20%"),
+        carried("hazard_ratio", HR, 0.2, study_span=YEAR, other_span=FIVE_YEARS),
+        (
+            "Starting risk 20% over 12 months, hazard ratio 0.72 (0.55 to 0.92) kept constant, carried to 5 years as if "
+            "hazards stayed constant."
+        ),
+    ),
+    (
+        "own over another span",
+        at_time(),
+        carried("risk_ratio", RR, 0.171, range_from="table", study_span=YEAR, other_span=FIVE_YEARS, **AT_OWN),
+        "At the study’s own starting risk of 17.1% over 12 months, carried to 5 years as if hazards stayed constant.",
+    ),
+    (
+        "usual of three",
+        of_total(patient=typed(start_kind="three")),
+        carried("risk_ratio", RR, 0.12, rank="usual"),
+        "Usual starting risk 12%, risk ratio 0.54 (0.37 to 0.78) kept constant.",
+    ),
+    (
+        "pairs",
+        paired(patient=typed()),
+        carried("risk_ratio", RR, 0.12, measure="pair_ratio"),
+        "Starting risk 12%, paired risk ratio 0.54 (0.37 to 0.78) kept constant.",
+    ),
+    (
+        "odds of pairs",
+        paired("matched", patient=typed()),
+        carried("odds_ratio", OR, 0.12, measure="pair_odds_ratio"),
+        "Starting risk 12%, odds ratio of the pairs 0.49 (0.32 to 0.75) kept constant.",
+    ),
+    (
+        "strata",
+        strata(risk="12%"),
+        carried("odds_ratio", OR, 0.12, measure="pooled_odds_ratio"),
+        "Starting risk 12%, pooled odds ratio 0.49 (0.32 to 0.75) kept constant.",
+    ),
+    (
+        "difference",
+        of_total(patient=typed("30%")),
+        carried("risk_difference", RD, 0.3),
+        "Starting risk 30%, risk difference 7.9 fewer per 100 (3.3 to 12.6) kept constant.",
+    ),
+    (
+        "survey",
+        of_total(design="survey", patient=typed()),
+        carried("risk_difference", effect(0.02, 0.01, 0.03), 0.12),
+        "Starting risk 12%, prevalence difference 2.0 more per 100 (1.0 to 3.0) kept constant.",
+    ),
+]
+
+
+@pytest.mark.parametrize(("outcome", "patient", "said"), [case[1:] for case in BASES], ids=[case[0] for case in BASES])
+def test_one_sentence_says_what_everything_rests_on(outcome, patient, said):
+    """The start and where it is from, the effect kept constant, and another time span."""
+    assert words_of(outcome, patient).basis == said
+    assert basis(outcome, patient) == said
+
+
+@pytest.mark.parametrize(
+    ("outcome", "patient", "note"),
+    [
+        (of_total(), carried("risk_ratio", RR, 0.12), "The interval leaves out that 12% is itself uncertain."),
+        (
+            of_total(patient=typed("24 of 200", effect="hazard_ratio")),
+            with_counts("hazard_ratio", HR, 24, 200),
+            "The interval holds the imprecision of both the starting risk and the hazard ratio.",
+        ),
+        (
+            of_total(design="cohort"),
+            carried("risk_ratio", RR, 0.139, start_from="overall"),
+            "The interval takes the overall risk and the share of people exposed as certain.",
+        ),
+        (
+            of_total(patient=typed("30%")),
+            carried("risk_difference", RD, 0.3),
+            "A difference kept constant has the same interval at every starting risk.",
+        ),
+        (
+            of_total(**ADJUSTED),
+            carried("odds_ratio", OR, 0.17115, adjusted=True, **AT_OWN),
+            "The interval leaves out that 17.1% is itself uncertain.",
+        ),
+    ],
+)
+def test_what_the_interval_holds_is_said(outcome, patient, note):
+    """Of both, of the effect alone, or with something taken as certain."""
+    words = words_of(outcome, patient)
+    assert words.range_note == note
+    assert words.detail.endswith(note)
+    assert note in patient_sentence(outcome, findings_with(outcome, patient), Choices())
+
+
+def test_the_studys_own_interval_is_not_talked_about():
+    """It has a name, which stays out of the column."""
+    patient = carried("risk_ratio", RR, 0.171, range_from="table", **AT_OWN)
+    words = words_of(of_total(), patient)
+    assert words.range_note == "The interval is the study’s own."
+    assert words.range_note not in words.detail
+    assert patient_sentence(of_total(), findings_with(of_total(), patient), Choices()) == AS_IN_THE_STUDY
+
+
+def test_each_risk_has_its_range():
+    """Without, with and difference, in people of the picture."""
+    words = words_of(of_total(patient=typed("24 of 200")), with_counts("risk_ratio", RR, 24, 200))
+    assert (words.without_interval, words.with_interval) == ("95% interval 8 to 17", "95% interval 4 to 11")
+    assert words.summary == "over 12 months, 95% interval 2 to 9"
+    bare = words_of(of_total(patient=typed()), carried("risk_ratio", RR, 0.12))
+    assert (bare.without_interval, bare.with_interval) == ("", "95% interval 4 to 9")
+
+
+def test_another_span_is_the_span_of_every_sentence():
+    """The study's own is named once, behind its starting risk."""
+    outcome = effect_only(risk="20%")
+    patient = carried("hazard_ratio", HR, 0.2, study_span=YEAR, other_span=FIVE_YEARS)
+    words = words_of(outcome, patient)
+    assert words.summary.startswith("over 5 years, ")
+    assert " fell at least once within 5 years and " in words.picture_sentence
+    assert "12 months" not in words.picture_sentence + words.summary + words.detail
+
+
+@pytest.mark.parametrize(
+    ("patient", "who"),
+    [
+        (carried("risk_ratio", RR, 0.12), "people who start at a risk of 12 in 100"),
+        (carried("risk_ratio", RR, 0.171, **AT_OWN), "people like those in the study"),
+    ],
+)
+def test_the_people_are_those_at_this_starting_risk(patient, who):
+    """Only at the study's own risk are they like those in the study."""
+    assert words_of(of_total(), patient).who == who
+
+
+def test_the_adjusted_effect_beside_counts_keeps_its_level():
+    """Its printed level, whatever was chosen for the table."""
+    outcome = of_total(design="cohort", adjusted_text="OR 0.47 (90% CI 0.30 to 0.72)", patient=typed())
+    patient = carried("odds_ratio", effect(0.47, 0.30, 0.72), 0.12, adjusted=True)
+    words = patient_words(outcome, findings_with(outcome, patient), Choices(level=0.99), 100)
+    assert "90% interval" in words.summary
+    assert "90% interval" in words.with_interval
+
+
+LOW, HIGH = carried("risk_ratio", RR, 0.05, rank="low"), carried("risk_ratio", RR, 0.25, rank="high")
+THREE = of_total(patient=typed(start_kind="three", low_risk_text="5%", high_risk_text="25%"))
+
+
+def test_low_usual_and_high_stand_in_one_table_on_one_number_of_people():
+    """Without, with, difference and number needed, each with its range."""
+    patient = carried("risk_ratio", RR, 0.12, rank="usual", low=LOW, high=HIGH)
+    found = findings_with(THREE, patient)
+    assert patient_table(THREE, found, Choices(), 100) == [
+        ("Low, 5%", "5", "3 (2 to 4)", "2 fewer (1 to 3)", "NNTB 44 (32 to 91)"),
+        ("Usual, 12%", "12", "6 (4 to 9)", "6 fewer (3 to 8)", "NNTB 19 (14 to 38)"),
+        ("High, 25%", "25", "14 (9 to 20)", "12 fewer (6 to 16)", "NNTB 9 (7 to 19)"),
+    ]
+    assert patient_table_head(THREE, found, Choices(), 100) == (
+        "Starting risk",
+        "Without: usual care, in 100 (95% interval)",
+        "With: night lights, in 100 (95% interval)",
+        "Difference, in 100 (95% interval)",
+        "Number needed (95% interval)",
+    )
+
+
+def test_one_starting_risk_is_one_row():
+    """Its label is the risk; the study's own is said to be."""
+    outcome = of_total(patient=typed())
+    (row,) = patient_table(outcome, findings_with(outcome, carried("risk_ratio", RR, 0.12)), Choices())
+    assert row == ("12%", "12", "6 (4 to 9)", "6 fewer (3 to 8)", "NNTB 19 (14 to 38)")
+    own = carried("risk_ratio", RR, 0.171, range_from="table", **AT_OWN)
+    assert patient_table(of_total(), findings_with(of_total(), own), Choices())[0].label == "The study’s own, 17.1%"
+
+
+def test_a_table_takes_more_people_only_where_somebody_would_be_nobody():
+    """0.4% of 100 would be nobody."""
+    low = carried("risk_ratio", RR, 0.004, rank="low")
+    found = findings_with(THREE, carried("risk_ratio", RR, 0.12, rank="usual", low=low, high=HIGH))
+    rows = patient_table(THREE, found, Choices(), 100)
+    assert [row.without for row in rows] == ["4", "120", "250"]
+    assert "in 1,000" in patient_table_head(THREE, found, Choices(), 100).without
+
+
+def test_a_rank_that_gives_nothing_says_why():
+    """In its row, and in its line."""
+    high = carried("risk_ratio", UP, 0.6, rank="high")
+    patient = carried("risk_ratio", UP, 0.12, rank="usual", low=Gap("baseline-unreadable"), high=high)
+    outcome = msgspec.structs.replace(THREE, index_group="second")
+    found = findings_with(outcome, patient, OR)
+    rows = patient_table(outcome, found, Choices())
+    assert rows[0] == ("Low", "The starting risk cannot be read; 12% or 12 in 100 would do.", "", "", "")
+    assert rows[2].with_ == "The risk would pass 100% here; the odds ratio can be carried instead."
+    assert patient_words(outcome, found, Choices(), 100).ranks == (
+        "At the low starting risk: the starting risk cannot be read; 12% or 12 in 100 would do.",
+        "At the high starting risk of 60%: the risk would pass 100% here; the odds ratio can be carried instead.",
+    )
+
+
+def test_no_patient_has_no_table():
+    """Nothing carried, nothing to list; the heads stand."""
+    outcome = effect_only()
+    found = msgspec.structs.replace(findings_with(outcome, carried("hazard_ratio", HR, 0.2)), patient=Gap("not-typed"))
+    assert patient_table(outcome, found, Choices()) == []
+    assert patient_table_head(outcome, found, Choices()).without == "Without: usual care"
+
+
+@pytest.mark.parametrize(
+    ("odds", "said"),
+    [
+        ((OR,), "The risk would pass 100% here; the odds ratio can be carried instead."),
+        ((), "The risk would pass 100% here."),
+    ],
+)
+def test_odds_are_offered_only_where_there_are_any(odds, said):
+    """A printed risk ratio alone has no odds ratio to carry."""
+    outcome = effect_only("risk_ratio", "1.86 (1.29 to 2.69)", risk="70%")
+    words = words_of(outcome, carried("risk_ratio", UP, 0.7), *odds)
+    assert words.detail == said
+    assert words.with_interval == ""
+
+
+def test_a_difference_below_nobody_is_withheld():
+    """Its estimate, or one limit of the risk, falls below 0%."""
+    outcome = of_total(patient=typed("5%"))
+    assert words_of(outcome, carried("risk_difference", RD, 0.05)).detail == "The risk would fall below 0% here."
+    words = words_of(of_total(patient=typed()), carried("risk_difference", RD, 0.12), OR)
+    assert words.with_interval == "95% interval below 0% to 9"
+    assert "would fall below 0%, so the interval is open there; carrying the odds ratio avoids it." in words.detail
+
+
+def test_no_effect_is_the_same_number():
+    """A ratio of 1 keeps its range on both sides, and has no relative words."""
+    outcome = of_total(patient=typed())
+    patient = carried("risk_ratio", effect(1.0, 0.7, 1.4), 0.12)
+    words = words_of(outcome, patient)
+    assert words.summary_bold == "The same number in 100 fell at least once"
+    assert "relative" not in words.detail
+    (row,) = patient_table(outcome, findings_with(outcome, patient), Choices())
+    assert row.difference == "the same number (4 fewer to 5 more)"
+
+
+def test_a_matched_study_is_turned_to_those_who_had_the_exposure():
+    """Cases and controls were compared by exposure; a patient asks what the exposure does."""
+    words = {"left_words_text": "took the drug", "right_words_text": "did not take the drug"}
+    outcome = paired("matched", first_label_text="", second_label_text="", patient=typed("2%"), **words)
+    patient = carried("odds_ratio", effect(2.0, 1.3, 3.2), 0.02, measure="pair_odds_ratio")
+    found = words_of(outcome, patient)
+    assert (found.without_title, found.with_title) == ("People who did not take the drug", "People who took the drug")
+    assert found.picture_sentence.startswith(
+        "Of 100 people who did not take the drug 2 (2%) became cases within 12 months and 98 did not; of 100 who took "
+        "the drug 4 (4%) became cases and 96 did not: 2 more in 100"
+    )
+    turned = msgspec.structs.replace(outcome, index_group="second")
+    assert words_of(turned, patient).with_title == "People who did not take the drug"
+    assert words_of(msgspec.structs.replace(turned, counted="right"), patient).with_title == "People who took the drug"
+
+
+def test_before_and_after_are_times():
+    """Nobody is without or with anything."""
+    outcome = paired("before-after", first_label_text="after", second_label_text="before", patient=typed("30%"))
+    patient = carried("risk_ratio", effect(0.71, 0.5, 0.98), 0.3, measure="pair_ratio", gap="design-before-after")
+    words = words_of(outcome, patient)
+    assert (words.without_title, words.with_title) == ("Before", "After")
+    assert words.picture_sentence.startswith(
+        "Of 100 people 30 (30%) fell at least once within 12 months before and 70 "
+    )
+    said = patient_sentence(outcome, findings_with(outcome, patient), Choices())
+    assert said.startswith(
+        "Of 100 people 30 fell at least once within 12 months before and 21 (95% interval 15 to 29) after"
+    )
+
+
+def test_a_letter_says_all_of_it():
+    """Both risks with their ranges, the change, the number needed, the relative figure after them, low and high."""
+    patient = carried("odds_ratio", OR, 0.12, rank="usual", low=LOW, high=HIGH)
+    said = patient_sentence(THREE, findings_with(THREE, patient), Choices())
+    order = (
+        "with usual care",
+        "with night lights",
+        " fewer in ",
+        "NNTB",
+        "In relative words",
+        "At the low",
+        "At the high",
+    )
+    places = [said.index(part) for part in order]
+    assert places == sorted(places)
+
+
+def test_a_letter_of_a_carried_risk_ratio_has_its_relative_figure_in_front():
+    """The ratio is what was kept constant, so its relative words are not repeated."""
+    said = patient_sentence(of_total(), findings_with(of_total(), carried("risk_ratio", RR, 0.12)), Choices())
+    assert "relative words" not in said
