@@ -50,7 +50,9 @@ def seen(sheet: Callable[..., object]) -> Callable[..., list[State]]:
         for state in STATES:
             with sheet(int(laid.across), int(laid.down), palette.page, ratio) as (pattern, painter):
                 painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-                draw_icon(painter, QRectF(0, 0, laid.across, laid.down), state, palette, icons)
+                draw_icon(
+                    painter, QRectF(0, 0, laid.across, laid.down), state, palette, icons, specks=denominator > 100
+                )
             patterns[shades(pattern)] = state
         found = []
         for icon in range(denominator):
@@ -109,6 +111,12 @@ def test_dark_and_sharp_screens_show_the_same(seen: Callable[..., list[State]], 
     assert seen(array, 100, DARK, ratio) == in_order(array)
 
 
+def test_a_crowd_is_specks_on_any_screen(seen: Callable[..., list[State]]) -> None:
+    """A thousand figures would run into chains: on the sharpest screen they are the specks of an ordinary one."""
+    array = EXPECTED[1_000].with_
+    assert seen(array, 1_000, ratio=4) == in_order(array)
+
+
 @pytest.mark.parametrize("scale", [1.25, 1.5, 1.7])
 @pytest.mark.parametrize("denominator", [100, 1_000])
 def test_tiles_are_as_sharp_as_single_icons(sheet: Callable[..., object], scale: float, denominator: int) -> None:
@@ -126,7 +134,8 @@ def test_tiles_are_as_sharp_as_single_icons(sheet: Callable[..., object], scale:
                 for state, start, stop in array.runs():
                     for icon in range(start, stop):
                         column, row = laid.grid.place(icon)
-                        draw_icon(painter, QRectF(laid.x(column), laid.y(row), laid.across, laid.down), state, LIGHT)
+                        cell = QRectF(laid.x(column), laid.y(row), laid.across, laid.down)
+                        draw_icon(painter, cell, state, LIGHT, specks=denominator > 100)
         images.append(shades(image))
     inked = [sum(251 - shade for shade in image if shade < 251) for image in images]
     assert inked[0] == pytest.approx(inked[1], rel=0.05)

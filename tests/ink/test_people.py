@@ -143,6 +143,17 @@ def test_a_small_key_can_stand_for_smaller_icons(sheet: Callable[..., object], s
     assert corners == [LIGHT.page, LIGHT.accent]
 
 
+def test_small_dots_stay_round(sheet: Callable[..., object]) -> None:
+    """A dot too small to be drawn leaves its corners free; a block fills them."""
+    corners = []
+    for icons in ("dot", "block"):
+        with sheet(10, 10, LIGHT.page) as (image, painter):
+            painter.setRenderHint(QPainter.RenderHint.Antialiasing)
+            draw_icon(painter, QRectF(0, 0, 10, 10), "affected", LIGHT, icons)
+        corners.append(image.pixelColor(1, 1).name().upper() == LIGHT.accent)
+    assert corners == [False, True]
+
+
 @pytest.mark.parametrize(("ratio", "person"), [(1, False), (2, True)])
 def test_a_sharp_screen_shows_people_at_half_the_size(sheet: Callable[..., object], ratio: int, person: bool) -> None:
     """Eight logical pixels are too few for a person on an ordinary screen, and enough on one of twice the pixels."""

@@ -59,7 +59,7 @@ def _draw_one_by_one(
         for icon in range(start, stop):
             column, row = laid.grid.place(icon)
             cell = QRectF(corner.x() + laid.x(column), corner.y() + laid.y(row), laid.across, laid.down)
-            draw_icon(painter, cell, state, palette, icons)
+            draw_icon(painter, cell, state, palette, icons, specks=laid.grid.crowded)
 
 
 def _in_block(laid: Laid, column: int, row: int) -> tuple[float, float]:
@@ -89,7 +89,7 @@ def _tile(state: State, laid: Laid, scale: float, palette: Palette, icons: Icons
     for row in range(last + 1):
         for column in range(last + 1):
             cell = QRectF(laid.x(column), laid.y(row), laid.across, laid.down)
-            draw_icon(painter, cell, state, palette, icons)
+            draw_icon(painter, cell, state, palette, icons, specks=laid.grid.crowded)
     painter.end()
     return pixmap
 

@@ -48,15 +48,18 @@ def draw_icon(
     palette: Palette,
     icons: Icons = "person",
     stands_for: float | None = None,
+    *,
+    specks: bool = False,
 ) -> None:
     """Draw one icon in ``cell``: filled when affected, hollow when not, with a mark of its own in between.
 
     In a key, ``stands_for`` is the width of the icons it explains, so that it shows the very shapes that they have.
+    ``specks`` are for crowds, in which figures would run into chains, however sharp the screen is.
     """
     across = pixels_across(painter, cell.width())
     shown = across if stands_for is None else pixels_across(painter, stands_for)
-    if shown < SHAPES_FROM:
-        draw_speck(painter, cell, state, palette)
+    if specks or shown < SHAPES_FROM:
+        draw_speck(painter, cell, state, palette, icons)
         return
     tall = TALL[icons]
     side = min(cell.width(), cell.height() / tall)

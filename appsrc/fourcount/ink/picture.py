@@ -104,9 +104,9 @@ class Picture:
         arrange = {"two": self._two, "one": self._one, "bars": self._bars}[self.options.arrangement]
         y += arrange(sheet, x, y, width, most)
         if self.key:
-            stands_for = self._laid(sheet.style, width, most).across
             y += px(12)
-            y += set_key(sheet, x, y, width, self.key, self.options.icons, stands_for)
+            laid = self._laid(sheet.style, width, most)
+            y += set_key(sheet, x, y, width, self.key, self.options.icons, laid)
         if self.words.note:
             y += px(8)
             y += sheet.text(x, y, width, self.words.note, "small", "muted")

@@ -62,6 +62,11 @@ class Grid:
             start += columns
 
     @property
+    def crowded(self) -> bool:
+        """Whether there are more icons than can be looked at one by one."""
+        return self.columns > self.block
+
+    @property
     def gaps_across(self) -> int:
         return (self.columns - 1) // self.across
 

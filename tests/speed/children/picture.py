@@ -68,7 +68,9 @@ def one_by_one() -> float:
         for state, first, stop in array.runs():
             for icon in range(first, stop):
                 column, row = laid.grid.place(icon)
-                draw_icon(painter, QRectF(laid.x(column), laid.y(row), laid.across, laid.down), state, LIGHT)
+                draw_icon(
+                    painter, QRectF(laid.x(column), laid.y(row), laid.across, laid.down), state, LIGHT, specks=True
+                )
     taken = time.perf_counter() - start
     painter.end()
     return taken * 1000
