@@ -35,7 +35,10 @@ SCREEN_SIZES: dict[Role, float] = {
 }
 """The same where one outcome fills a screen and is read from across a desk."""
 
-BOLD: tuple[Role, ...] = ("figure", "strong", "estimate", "sentence")
+COMPACT_SIZES: dict[Role, float] = {**SIZES, "body": 12, "small": 11, "figure": 14, "strong": 12, "total": 14}
+"""The printed page where it holds many outcomes."""
+
+BOLD: tuple[Role, ...] = ("figure", "strong", "estimate", "sentence", "total")
 
 
 class PaperStyle:
@@ -65,5 +68,6 @@ class PaperStyle:
             font.setWeight(QFont.Weight.DemiBold if bold else QFont.Weight.Normal)
             font.setHintingPreference(QFont.HintingPreference.PreferNoHinting)
             font.setFeature(QFont.Tag("tnum"), 1)
+            font.setFeature(QFont.Tag("liga"), 0)  # a search for "figure" finds no ligature
             self._fonts[key] = font
         return self._fonts[key]

@@ -13,9 +13,8 @@ from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
 from fourcount.ink.patient_picture import plan_of
 from fourcount.ink.picture import Picture
 from fourcount.picture.bar_pair import bar_pair
-from fourcount.picture.common import plan_at
 from fourcount.picture.options import USUAL, PictureOptions
-from fourcount.picture.plan import Plan
+from fourcount.picture.plan import Plan, plan_on
 from fourcount.record.outcome import Outcome
 from fourcount.wording import numbers, plain_texts
 from fourcount.wording.axis import axis_words
@@ -51,7 +50,7 @@ def shown(
     if plan is None or risks is None:
         return None
     if denominator is not None and denominator != plan.denominator:
-        plan = plan_at(plan.without_risk, plan.with_risk, denominator)
+        plan = plan_on(denominator, plan.without_risk, plan.with_risk, plan.low, plan.high)
     return Shown(plain_words(outcome, patient, risks, people_of(plan)), plan, options)
 
 
@@ -61,7 +60,7 @@ class PlainPicture:
     def __init__(self, it: Shown) -> None:
         self._words = it.words
         options = it.options._replace(relative=False)
-        words = _picture_words(it)
+        words = picture_words(it)
         self._bare = Picture(it.plan, words, options._replace(captions=False))
         self._captioned = Picture(it.plan, words, options)
 
@@ -91,7 +90,7 @@ class PlainPicture:
         if len(columns) != 2 or columns[0][0] == columns[1][0] or self._bare.bars:
             return _picture(self._captioned, painter, style, x, y, width, within)
         sides = (self._words.without, self._words.with_)
-        blocks = [_caption(style, side) for side in sides]
+        blocks = [caption(style, side) for side in sides]
         heights = [
             max(paragraph_height(block[line], wide) for block, (_, wide) in zip(blocks, columns, strict=True))
             for line in range(len(blocks[0]))
@@ -121,7 +120,7 @@ def _picture(
     return picture.draw(painter, style, x, y, width, within)
 
 
-def _caption(style: PaperStyle, side: PlainSide) -> tuple[Sequence[Run], Sequence[Run], Sequence[Run]]:
+def caption(style: PaperStyle, side: PlainSide) -> tuple[Sequence[Run], Sequence[Run], Sequence[Run]]:
     """Name, count and the other frame: three paragraphs, so that both groups' lines stand level."""
     ink, muted = style.palette.ink, style.palette.muted
     figure, body = style.font("figure"), style.font("body")
@@ -132,7 +131,8 @@ def _caption(style: PaperStyle, side: PlainSide) -> tuple[Sequence[Run], Sequenc
     )
 
 
-def _picture_words(it: Shown) -> PictureWords:
+def picture_words(it: Shown) -> PictureWords:
+    """The words inside the picture of an outcome."""
     words, plan = it.words, it.plan
     entries = (
         KeyEntry("affected", words.event),

@@ -11,11 +11,12 @@ from typing import NamedTuple
 
 from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
 from fourcount.record.outcome import Certainty, Outcome
-from fourcount.wording import carried, event_names, names, numbers, of_people, plain, plain_texts
+from fourcount.wording import carried, event_names, names, numbers, of_people, plain, plain_texts, spans, starts
 from fourcount.wording.form import lacking
 from fourcount.wording.gaps import gap_text, why_no_patient
 from fourcount.wording.headline import choose
 from fourcount.wording.patient import WHICH_PEOPLE, missing
+from fourcount.wording.subject import subject
 
 
 class Ends(NamedTuple):
@@ -62,7 +63,7 @@ class PlainWords(NamedTuple):
     open_: str
     range_: str
     relative: str
-    starts: tuple[str, ...]
+    other_starts: tuple[str, ...]
     study: str
     rounded: str
     turned: str
@@ -71,7 +72,7 @@ class PlainWords(NamedTuple):
 
 def why_not(outcome: Outcome, findings: OutcomeFindings) -> str:
     """Why this outcome cannot be shown to a patient, in one sentence that names what is missing; "" where it can."""
-    lacks = missing_items(outcome)
+    lacks = missing_items(subject(outcome))
     if lacks:
         return plain_texts.MISSING.format(items=_listed(lacks))
     patient = findings.patient
@@ -126,7 +127,7 @@ def people_in_text(risks: PlainRisks) -> int:
 
 def plain_words(outcome: Outcome, patient: PatientFindings, risks: PlainRisks, people: int) -> PlainWords:
     """All words of one outcome that ``why_not`` lets through, of ``people`` people."""
-    turned = plain.is_turned(outcome)
+    outcome, turned = subject(outcome), plain.is_turned(outcome)
     column = plain.unwelcome_column(outcome)
     event = plain.plain_said(outcome, column)
     other = plain.plain_said(outcome, "left" if column == "right" else "right") or plain_texts.DO_NOT
@@ -152,7 +153,7 @@ def plain_words(outcome: Outcome, patient: PatientFindings, risks: PlainRisks, p
         open_=plain_texts.OPEN if _reaches_no_effect(risks) else "",
         range_=_range(risks, people, index),
         relative=_relative(risks, people),
-        starts=_other_starts(patient, turned, people, index),
+        other_starts=_other_starts(patient, turned, people, index),
         study=_study(outcome, patient),
         rounded="" if adds == numbers.people(risks.difference, people) else plain_texts.ROUNDED,
         turned=plain_texts.TURNED.format(event=event) if turned else "",
@@ -170,7 +171,7 @@ def title(outcome: Outcome, patient: PatientFindings, event: str) -> str:
 def span(outcome: Outcome, patient: PatientFindings) -> str:
     """The time with its preposition, "in 12 months": the other time span where one is asked for."""
     if patient.other_span is not None:
-        return in_time(names.bare(outcome.patient.other_span_text))
+        return in_time(spans.duration(patient.other_span))
     return "" if _times_differ(outcome) else in_time(names.bare(outcome.span_text))
 
 
@@ -223,7 +224,7 @@ def _summary(risks: PlainRisks, people: int, event: str) -> str:
 
 def _lead(patient: PatientFindings, risks: PlainRisks, people: int) -> str:
     """Who is drawn: people like the study's only where the starting risk is the study's own, over its own time."""
-    if patient.baseline_from == "reference" and patient.other_span is None:
+    if starts.as_in_the_study(patient):
         return plain_texts.LIKE_THE_STUDY
     return plain_texts.START_AT.format(count=of_people.affected(risks.without, people), people=numbers.whole(people))
 
@@ -260,9 +261,13 @@ def _relative(risks: PlainRisks, people: int) -> str:
     share = abs(risks.with_ / risks.without - 1)
     word = "lower" if risks.difference < 0 else "higher"
     before, after = (of_people.affected(risk, people) for risk in (risks.without, risks.with_))
-    return plain_texts.RELATIVE.format(
-        before=before, after=after, people=numbers.whole(people), percent=numbers.percent_whole(share), word=word
+    percent = numbers.percent_whole(share)
+    said = plain_texts.RELATIVE.format(
+        before=before, after=after, people=numbers.whole(people), percent=percent, word=word
     )
+    drawn = [numbers.people(risk, people) for risk in (risks.without, risks.with_)]
+    same = drawn[0] and numbers.percent_whole(abs(drawn[1] / drawn[0] - 1)) == percent
+    return said if same else f"{said} {plain_texts.BEFORE_ROUNDING}"
 
 
 def _other_starts(patient: PatientFindings, turned: bool, people: int, index: str) -> tuple[str, ...]:

@@ -17,6 +17,7 @@ DO_NOT = "do not"
 HOW_MANY = "How many people {event}"
 EACH_FIGURE = "Each figure is one person."
 EACH_MARK = "Each mark is one person."
+EACH_FIGURE_OR_MARK = "Each figure or mark is one person."
 LIKE_THE_STUDY = "These people are like those in the study."
 START_AT = "These people start at a risk of {count} in {people}."
 CHANGE = "On balance, {number} {side} of these {people} {event}."
@@ -35,6 +36,7 @@ LONGEST_KEY = 40
 OPEN = "The study leaves open that there is no difference."
 RANGE = "{index}, it could be from {low} to {high} in {people}."
 RELATIVE = "Going from {before} to {after} in {people} is also called “{percent} {word}”."
+BEFORE_ROUNDING = "(That is worked out before rounding.)"
 OTHER_START = "If {before} in {people} is the risk at the start, it is {after} in {people} {index}."
 
 CERTAINTY_NAMES: dict[Certainty, str] = {
