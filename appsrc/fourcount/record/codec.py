@@ -11,7 +11,7 @@ import msgspec
 
 from fourcount.record.editing.outcomes import MOST_OUTCOMES
 from fourcount.record.editing.stratum_rows import MOST_STRATA
-from fourcount.record.file.limits import beyond_limits
+from fourcount.record.file.limits import beyond_limits, beyond_numbers
 from fourcount.record.file.reading import LARGEST_FILE, read_tree
 from fourcount.record.file.refused import Refused, refused_by_types
 from fourcount.record.file.upgrades import FORMAT, FORMAT_KEY, upgraded
@@ -46,8 +46,9 @@ def decode(data: bytes) -> Record | Refused:
     fields = upgraded(tree)
     if isinstance(fields, Refused):
         return fields
-    if "outcomes" not in fields:
-        return Refused("missing-field", {"place": "", "name": "outcomes"})
+    refusal = beyond_numbers(fields)
+    if refusal is not None:
+        return refusal
     try:
         record = msgspec.convert(fields, Record)
     except msgspec.ValidationError as error:

@@ -101,11 +101,13 @@ def refusal_text(refused: Refused) -> str:
 
 def place_words(path: str) -> str:
     """A path in a record in words: "in the starting risk of outcome 2", "in stratum 3 of outcome 1"."""
-    steps = path.split(".") if path else []
+    if not path:
+        return "in the file"
+    steps = path.split(".")
     words: list[str] = []
     for step, behind in zip(steps, [*steps[1:], ""], strict=True):
         if step in COUNTED and behind.isdecimal():
             words.append(f"{COUNTED[step]} {int(behind) + 1}")
         elif not step.isdecimal() and not (behind and step in SILENT):
             words.append(f"the {FIELD_NAMES[step]}" if step in FIELD_NAMES else f"“{step}”")
-    return f"in {' of '.join(reversed(words))}" if words else "in the file"
+    return f"in {' of '.join(reversed(words))}"

@@ -2,7 +2,8 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator
+from collections.abc import Iterator, Mapping
+from typing import Any
 
 import msgspec
 
@@ -24,12 +25,25 @@ def beyond_limits(record: Record) -> Refused | None:
     return _number_beyond(record) or _text_beyond(record)
 
 
+def beyond_numbers(fields: Mapping[str, Any]) -> Refused | None:
+    """The number of outcomes in a file's fields, before anything is made of them: none, or more than a record has."""
+    if "outcomes" not in fields:
+        return Refused("missing-field", {"place": "", "name": "outcomes"})
+    outcomes = fields["outcomes"]
+    if not isinstance(outcomes, list | tuple):
+        return None
+    if not outcomes:
+        return Refused("no-outcome", {"place": "outcomes"})
+    if len(outcomes) > MOST_OUTCOMES:
+        return Refused("too-many-outcomes", {"place": "outcomes", "limit": MOST_OUTCOMES})
+    return None
+
+
 def _number_beyond(record: Record) -> Refused | None:
     """Too many outcomes or rows of strata, or none."""
-    if not record.outcomes:
-        return Refused("no-outcome", {"place": "outcomes"})
-    if len(record.outcomes) > MOST_OUTCOMES:
-        return Refused("too-many-outcomes", {"place": "outcomes", "limit": MOST_OUTCOMES})
+    refusal = beyond_numbers({"outcomes": record.outcomes})
+    if refusal is not None:
+        return refusal
     for number, outcome in enumerate(record.outcomes):
         if not isinstance(outcome.table, Strata):
             continue

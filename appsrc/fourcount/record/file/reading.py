@@ -41,6 +41,8 @@ def read_tree(data: bytes) -> Tree | Refused:
         return text
     if not text.strip():
         return Refused("empty")
+    if not text.lstrip().startswith("{"):
+        return Refused("not-a-record")
     if _depth(text) > DEEPEST:
         return Refused("too-deep", {"limit": DEEPEST})
     try:
@@ -55,8 +57,6 @@ def read_tree(data: bytes) -> Tree | Refused:
         if not text[error.pos :].strip() or error.msg.startswith("Unterminated string"):
             return Refused("cut-off")
         return Refused("damaged", {"line": error.lineno, "column": error.colno})
-    if not isinstance(found, _Pairs):
-        return Refused("not-a-record")
     return _with_single_keys(found, ())
 
 
