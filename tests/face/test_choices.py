@@ -59,7 +59,7 @@ def test_a_case_control_study_withholds_risks_with_one_reason(example: Hands) ->
     assert all(name in withheld[0] for name in ("Difference", "NNT", "Risk, reference group", "Risk ratio"))
     assert not any(character.isdigit() for character in withheld[0])
     assert "odds" in example.sentence.lower()
-    assert not example.window.patient.picture.isVisible()
+    assert not example.window.patient.figures.picture.isVisible()
     assert "starting risk" in example.window.patient.waits.text()
 
 
@@ -67,7 +67,7 @@ def test_a_case_control_study_with_a_starting_risk_says_what_it_rests_on(example
     """With an outside risk the patient's column draws, carries the odds ratio, and a caution names the risk."""
     example.choose(example.window.printed.design, "case-control study")
     example.write(example.window.patient.baseline, "12%")
-    assert example.window.patient.picture.isVisible()
+    assert example.window.patient.figures.picture.isVisible()
     assert not example.window.patient.effect.isEnabled()
     assert example.window.patient.effect.currentText().startswith("odds ratio")
     assert any("rests on the starting risk of 12%" in text for text in example.window.cautions.texts)

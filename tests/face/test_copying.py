@@ -154,7 +154,7 @@ def test_links_copy_as_the_commands_do(example: Hands, link: str, command: str) 
     places = {
         "copy-text": window.says.copies[0],
         "copy-table": window.says.copies[1],
-        "copy-picture": window.patient.copy,
+        "copy-picture": window.patient.figures.copy,
     }
     widget = places[command]
     assert widget.isVisible()

@@ -138,8 +138,8 @@ def test_a_form_that_carries_nothing_says_so_quietly(hands: Hands, form: Form) -
     hands.count(*TYPED[form])
     patient = hands.window.patient
     assert patient.waits.isVisible()
-    assert not patient.picture.isVisible()
-    assert not patient.copy.isVisible()
+    assert not patient.figures.picture.isVisible()
+    assert not patient.figures.copy.isVisible()
 
 
 @pytest.mark.parametrize("form", list(TYPED))

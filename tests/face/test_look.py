@@ -18,7 +18,7 @@ def pixel_sizes(window: MainWindow) -> tuple[int, ...]:
     """Sizes of text in every part of the window."""
     widgets = (
         window.says.sentence, window.printed.grid.cells["first_left_text"], window.printed.span, window.header.title,
-        window.says.family, window.says.more, window.patient.detail, window.menuBar(),
+        window.says.family, window.says.more, window.patient.figures.detail, window.menuBar(),
     )  # fmt: skip
     return tuple(widget.font().pixelSize() for widget in widgets)
 

@@ -9,9 +9,9 @@ from PySide6.QtWidgets import QWidget
 
 from fourcount.face.cell import CountCell
 from fourcount.face.fields import ChoiceField
-from fourcount.face.for_one_patient import PictureView
 from fourcount.face.links import Link
 from fourcount.face.measure_row import MeasureRow
+from fourcount.face.picture_view import PictureView
 from fourcount.face.text import Words
 from fourcount.record import editing
 from fourcount.record.outcome import CELLS, FORMS, Design, Form

@@ -149,6 +149,6 @@ def test_a_printed_effect_is_carried_to_a_typed_starting_risk(hands: Hands) -> N
     assert "starting risk" in patient.waits.text()
     assert patient.baseline.placeholderText() == "needed"
     hands.write(patient.baseline, "12%")
-    assert patient.picture.isVisible()
+    assert patient.figures.picture.isVisible()
     assert not patient.effect.isEnabled()
     assert patient.effect.currentText().startswith("odds ratio 0.49")

@@ -25,7 +25,7 @@ BAD = [
 
 def drawn(hands: Hands) -> Picture:
     """The picture on screen."""
-    picture = hands.window.patient.picture.picture
+    picture = hands.window.patient.figures.drawn
     assert picture is not None
     return picture
 
@@ -45,7 +45,7 @@ def test_a_starting_risk_is_taken_in_many_forms(example: Hands, typed: str) -> N
     assert plan.without_risk == pytest.approx(0.12)
     assert plan.with_risk == pytest.approx(0.12 * (38 / 412) / (70 / 409))
     assert plan.denominator == 100
-    assert example.window.patient.summary.text().startswith("6 fewer in 100")
+    assert example.window.patient.figures.summary.text().startswith("6 fewer in 100")
     assert not example.window.patient.baseline.marked
 
 
@@ -58,13 +58,13 @@ def test_a_bad_starting_risk_is_marked_and_nothing_drawn(example: Hands, typed: 
     assert patient.baseline.marked
     assert patient.mark.text() == sentence
     assert patient.mark.isVisible()
-    assert not patient.picture.isVisible()
-    assert not patient.summary.isVisible()
+    assert not patient.figures.picture.isVisible()
+    assert not patient.figures.summary.isVisible()
     assert list(example.rows) == list(rows)
     assert example.rows["risk_ratio"] == rows["risk_ratio"]
     example.write(patient.baseline, "")
     assert not patient.mark.isVisible()
-    assert patient.picture.isVisible()
+    assert patient.figures.picture.isVisible()
 
 
 def test_a_starting_risk_keeps_its_source(example: Hands) -> None:
@@ -77,7 +77,7 @@ def test_a_starting_risk_keeps_its_source(example: Hands) -> None:
 def test_a_typed_starting_risk_says_what_the_interval_leaves_out(example: Hands) -> None:
     """A bare risk has no interval of its own, and the effect is assumed to be the same there."""
     example.write(example.window.patient.baseline, "12%")
-    assert "leaves out that 12% is itself uncertain" in example.window.patient.detail.text()
+    assert "leaves out that 12% is itself uncertain" in example.window.patient.figures.detail.text()
     assert any("assumed to be the same at 12%" in text for text in example.window.cautions.texts)
 
 
@@ -105,11 +105,11 @@ def test_a_risk_over_100_percent_is_refused_and_the_odds_ratio_offered(hands: Ha
     """A risk ratio of 3 cannot be carried to 60%; its odds ratio can."""
     hands.count("60", "40", "20", "80")
     hands.write(hands.window.patient.baseline, "60%")
-    assert not hands.window.patient.picture.isVisible()
-    assert "the odds ratio can be carried instead" in hands.window.patient.detail.text()
+    assert not hands.window.patient.figures.picture.isVisible()
+    assert "the odds ratio can be carried instead" in hands.window.patient.figures.detail.text()
     effect = hands.window.patient.effect
     hands.choose(effect, effect.itemText(1))
-    assert hands.window.patient.picture.isVisible()
+    assert hands.window.patient.figures.picture.isVisible()
 
 
 @pytest.mark.parametrize(
@@ -145,7 +145,7 @@ def test_bars_instead_of_people_and_back(example: Hands) -> None:
 def test_the_picture_is_said_in_full(example: Hands) -> None:
     """A screen reader hears both groups, both frames, the change, its interval, and that nobody can be pointed to."""
     example.write(example.window.patient.baseline, "12%")
-    view = example.window.patient.picture
+    view = example.window.patient.figures.picture
     said = view.accessibleDescription()
     assert view.accessibleName()
     for part in (
@@ -164,7 +164,7 @@ def test_the_picture_is_said_in_full(example: Hands) -> None:
 def test_no_effect_is_said_as_such(hands: Hands) -> None:
     """Equal risks are the same number, with neither benefit nor harm."""
     hands.count("10", "90", "10", "90")
-    assert hands.window.patient.summary.text().startswith("The same number in 100")
+    assert hands.window.patient.figures.summary.text().startswith("The same number in 100")
     assert drawn(hands).plan.with_.avoided == drawn(hands).plan.with_.added == 0
 
 
@@ -184,7 +184,7 @@ def test_a_copied_picture_says_what_it_rests_on(example: Hands) -> None:
     assert drawn(example).words.lines[0] == (
         "Starting risk 12% (ward audit 2025), risk ratio 0.54 (0.37 to 0.78) kept constant."
     )
-    assert example.window.patient.summary.text().startswith("6 fewer in 100")
+    assert example.window.patient.figures.summary.text().startswith("6 fewer in 100")
 
 
 def test_a_survey_carries_a_prevalence_ratio(example: Hands) -> None:

@@ -33,7 +33,7 @@ def test_a_table_is_answered_by_keyboard_alone(hands: Any) -> None:
     assert hands.window.session.record.choices.family == "exact"
     hands.do("baseline")
     hands.type("12%")
-    assert hands.window.patient.picture.picture.words.without.number == "12 in 100"
+    assert hands.window.patient.figures.drawn.words.without.number == "12 in 100"
     full = hands.window.session.record
     hands.press("Ctrl+Z", 13)
     assert hands.window.session.record == empty

@@ -153,7 +153,7 @@ def test_strata_carry_the_pooled_effect(strata: Hands) -> None:
     patient = strata.window.patient
     assert patient.baseline.placeholderText() == "needed"
     strata.write(patient.baseline, "12%")
-    assert patient.picture.isVisible()
+    assert patient.figures.picture.isVisible()
     pooled = strata.rows["pooled_risk_ratio"].split(": ")[1].split(",")[0]
     assert patient.effect.currentText().startswith(f"risk ratio {pooled}")
 

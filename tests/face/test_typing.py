@@ -50,7 +50,7 @@ def test_four_counts_give_sentence_rows_and_picture(hands: Hands) -> None:
     assert hands.rows["risk_ratio"].startswith("Risk ratio: 0.54")
     assert hands.rows["odds_ratio"].startswith("Odds ratio: 0.49")
     assert hands.p.startswith("p < 0.001, two-sided (N−1 chi-square)")
-    assert hands.window.patient.picture.isVisible()
+    assert hands.window.patient.figures.picture.isVisible()
     assert not hands.window.patient.waits.isVisible()
 
 
@@ -112,17 +112,21 @@ def test_tab_into_a_cell_selects_its_count(example: Hands) -> None:
 def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) -> None:
     """From the title to the cautions, the paper's result right after the counts, each control once."""
     window, grid, rare = example.window, example.window.printed.grid, example.window.printed.rare
+    patient, bar = window.patient, window.header.bar
     assert rare.optional
     assert rare.check
+    assert bar
     expected = [
-        window.header.title, window.header.source, window.printed.design, window.printed.name,
+        window.header.title, window.header.source, bar.tabs, bar.plus, window.printed.design, window.printed.name,
         window.printed.welcome, window.printed.event_words, window.printed.span,
         window.printed.form, window.printed.layout_choice,
         grid.headings["left"], grid.headings["right"], grid.labels["first"], grid.labels["second"],
         *grid.cells.values(), rare.check.paper.measure, rare.check.paper.text, *window.printed.links,
         *rare.optional.links.values(), *(example.row(key) for key in (*MEASURES, "test")),
-        window.says.family, window.says.level, window.says.more, window.says.help, *window.says.copies,
-        window.patient.baseline, window.patient.source, window.patient.effect, window.patient.copy, window.cautions,
+        window.says.family, window.says.level, window.says.more, window.says.help, window.says.own_line_link,
+        *window.says.copies, patient.start.kind, patient.baseline, patient.source, patient.effect,
+        patient.figures.show_patient, patient.figures.handout, patient.figures.draw,
+        patient.figures.copy, patient.figures.curve, *patient.quiet.links.values(), window.cautions,
     ]  # fmt: skip
     example.click(window.header.title)
     seen = []
@@ -249,13 +253,13 @@ def test_names_show_up_wherever_they_belong(example: Hands) -> None:
     assert "with night lights" in example.sentence
     assert example.rows["risk_index"].startswith("Risk, night lights: ")
     assert grid.cells[CELLS[0]].accessibleName() == "Night lights, fell"
-    assert "with usual care 17 (17%) fell at least once" in window.patient.picture.accessibleDescription()
-    assert "Still to be named" not in window.patient.detail.text()
+    assert "with usual care 17 (17%) fell at least once" in window.patient.figures.picture.accessibleDescription()
+    assert "Still to be named" not in window.patient.figures.detail.text()
 
 
 def test_a_picture_of_nameless_groups_says_what_is_missing(example: Hands) -> None:
     """Four counts alone are drawn with stand-in names, and the column lists what is still to be named."""
-    detail = example.window.patient.detail.text()
+    detail = example.window.patient.figures.detail.text()
     assert "Still to be named: the event, the reference group, the index group, the time span." in detail
 
 

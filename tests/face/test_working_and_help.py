@@ -9,7 +9,7 @@ from PySide6.QtCore import Qt
 from PySide6.QtTest import QTest
 
 from fourcount import __version__
-from fourcount.face.actions import COMMANDS
+from fourcount.face.actions import COMMANDS, LATER_COMMANDS, command_names
 from fourcount.face.help_window import HelpWindow
 from fourcount.stats.methods import METHODS, TESTS
 from fourcount.wording import labels
@@ -112,7 +112,8 @@ def test_every_command_has_keys_of_its_own(hands: Hands) -> None:
 def test_every_command_is_in_a_menu(hands: Hands) -> None:
     """Whatever a key does can be found in the menus as well, under its name."""
     named = {action.text() for menu in hands.window.menus.values() for action in menu.actions()}
-    assert {labels.COMMANDS[command.key] for command in COMMANDS} <= named
+    words = command_names()
+    assert {words[command.key] for command in (*COMMANDS, *LATER_COMMANDS)} <= named
 
 
 def test_access_keys_of_a_menu_are_unique(hands: Hands) -> None:
@@ -126,7 +127,7 @@ def test_the_keys_window_lists_every_command(hands: Hands) -> None:
     """Names and keys of all commands stand there, as this platform writes them."""
     text = opened(hands, "keys").text.toPlainText()
     for key, action in hands.window.actions_by_key.items():
-        assert labels.COMMANDS[key].replace("&", "") in text
+        assert command_names()[key].replace("&", "") in text
         assert action.shortcut().toString() in text
     assert all(words.format(paste="Ctrl+V") in text for pair in labels.KEYS_MORE for words in pair)
 

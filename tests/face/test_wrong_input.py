@@ -36,7 +36,7 @@ def test_a_wrong_count_is_kept_marked_and_explained(example: Hands, typed: str, 
     assert cells[CELLS[0]].accessibleDescription() == sentence
     assert example.rows == {}
     assert example.sentence == "A cell of the table cannot be used; the line under the table says why."
-    assert not example.window.patient.picture.isVisible()
+    assert not example.window.patient.figures.picture.isVisible()
 
 
 @pytest.mark.parametrize("typed", [typed for typed, _ in WRONG])
@@ -88,7 +88,7 @@ def test_all_zeros_say_why_nothing_can_be_given(hands: Hands) -> None:
     assert hands.sentence == "There is nobody in either group."
     assert hands.rows
     assert all("nan" not in row.lower() for row in hands.rows.values())
-    assert not hands.window.patient.picture.isVisible()
+    assert not hands.window.patient.figures.picture.isVisible()
     assert hands.window.patient.waits.text()
 
 

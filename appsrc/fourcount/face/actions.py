@@ -59,6 +59,26 @@ COMMANDS = (
 )
 """All commands in the order of the menus, but for those that take a form of print."""
 
+LATER_COMMANDS = (
+    Command("handout", "file", Standard.Print),
+    Command("own-line", "table", "Ctrl+4"),
+    Command("show-patient", "view", "F11"),
+    Command("curve", "view", "Ctrl+Shift+R"),
+    Command("uncertainty", "picture", "Ctrl+Shift+I", checkable=True, parts_from_last=True),
+    Command("relative", "picture", "Ctrl+Shift+B", checkable=True),
+    Command("outcome-add", "outcomes", "Ctrl+Shift+N"),
+    Command("outcome-copy", "outcomes", "Ctrl+D"),
+    Command("outcome-next", "outcomes", "Ctrl+PgDown", parts_from_last=True),
+    Command("outcome-previous", "outcomes", "Ctrl+PgUp"),
+    Command("outcome-left", "outcomes", "Ctrl+Shift+PgUp"),
+    Command("outcome-right", "outcomes", "Ctrl+Shift+PgDown"),
+    Command("outcome-remove", "outcomes", "Ctrl+Shift+W", parts_from_last=True),
+)
+"""Commands that are made once the window has painted."""
+
+PLACES = {"handout": "quit", "show-patient": "bigger", "curve": "bigger"}
+"""Before which command a later one stands in its menu, where that is not its end."""
+
 FORM_COMMANDS = tuple(Command(f"form-{form}", "forms", f"F{number}") for number, form in enumerate(FORMS, start=2))
 """One for each form; they are made once the window has painted."""
 
@@ -68,23 +88,25 @@ MORE_KEYS = {"redo": "Ctrl+Y", "bigger": "Ctrl+="}
 
 def make_actions(window: QMainWindow) -> dict[str, QAction]:
     """One action for each command, not connected yet."""
-    actions = {}
-    for command in COMMANDS:
-        action = QAction(labels.COMMANDS[command.key], window)
-        action.setCheckable(command.checkable)
-        if isinstance(command.keys, str):
-            action.setShortcut(QKeySequence(command.keys))
-        elif command.keys is not None:
-            action.setShortcuts(command.keys)
-        extra = MORE_KEYS.get(command.key)
-        if extra and QKeySequence(extra) not in action.shortcuts():
-            action.setShortcuts([*action.shortcuts(), QKeySequence(extra)])
-        if command.key == "quit" and action.shortcut().isEmpty():
-            action.setShortcut(QKeySequence("Ctrl+Q"))
-        actions[command.key] = action
+    actions = {command.key: _action(window, command, labels.COMMANDS[command.key]) for command in COMMANDS}
+    if actions["quit"].shortcut().isEmpty():
+        actions["quit"].setShortcut(QKeySequence("Ctrl+Q"))
     actions["about"].setMenuRole(QAction.MenuRole.AboutRole)
     actions["quit"].setMenuRole(QAction.MenuRole.QuitRole)
     return actions
+
+
+def _action(window: QMainWindow, command: Command, words: str) -> QAction:
+    action = QAction(words, window)
+    action.setCheckable(command.checkable)
+    if isinstance(command.keys, str):
+        action.setShortcut(QKeySequence(command.keys))
+    elif command.keys is not None:
+        action.setShortcuts(command.keys)
+    extra = MORE_KEYS.get(command.key)
+    if extra and QKeySequence(extra) not in action.shortcuts():
+        action.setShortcuts([*action.shortcuts(), QKeySequence(extra)])
+    return action
 
 
 def fill_menus(window: QMainWindow, actions: dict[str, QAction]) -> dict[str, QMenu]:
@@ -98,6 +120,53 @@ def fill_menus(window: QMainWindow, actions: dict[str, QAction]) -> dict[str, QM
         if command.key == "form":
             menus["table"].addMenu(menus["forms"])
     return menus
+
+
+def add_later(window: QMainWindow, menus: dict[str, QMenu], actions: dict[str, QAction]) -> dict[str, QAction]:
+    """The commands that no first paint needs, hung into the menus, with menus of their own for picture and outcomes."""
+    from fourcount.wording.patient_labels import OUTCOME_MENU, PICTURE_MENU
+
+    menus["outcomes"], menus["picture"] = QMenu(OUTCOME_MENU, window), QMenu(PICTURE_MENU, window)
+    words, made = command_names(), {}
+    for command in LATER_COMMANDS:
+        made[command.key] = _action(window, command, words[command.key])
+        menu = menus[command.menu]
+        if command.parts_from_last:
+            menu.addSeparator()
+        if command.key in PLACES:
+            menu.insertAction(actions[PLACES[command.key]], made[command.key])
+        else:
+            menu.addAction(made[command.key])
+    menus["file"].insertSeparator(made["handout"])
+    menus["view"].insertSeparator(actions["bigger"])
+    menus["view"].insertMenu(actions["more"], menus["picture"])
+    menus["table"].addSeparator()
+    menus["table"].addMenu(menus["outcomes"])
+    return made
+
+
+def add_drawing(menu: QMenu, icons: str, arrangement: str) -> tuple[QActionGroup, QActionGroup]:
+    """How people are drawn and how the groups stand, before what can be switched on; an action's data is its key."""
+    from fourcount.wording.patient_labels import ARRANGEMENTS, ICONS
+
+    groups = (QActionGroup(menu), QActionGroup(menu))
+    first = menu.actions()[0]
+    for group, choices, now in zip(groups, (ICONS, ARRANGEMENTS), (icons, arrangement), strict=True):
+        menu.insertSeparator(first)
+        for key, words in choices.items():
+            action = QAction(words, group)
+            action.setCheckable(True)
+            action.setData(key)
+            action.setChecked(key == now)
+            menu.insertAction(first, action)
+    return groups
+
+
+def command_names() -> dict[str, str]:
+    """What every command is called."""
+    from fourcount.wording.patient_labels import OUTCOME_COMMANDS, PATIENT_COMMANDS
+
+    return labels.COMMANDS | PATIENT_COMMANDS | OUTCOME_COMMANDS
 
 
 def add_forms(window: QMainWindow, menu: QMenu) -> dict[str, QAction]:
@@ -127,9 +196,13 @@ def add_appearances(window: QMainWindow, menu: QMenu, now: str) -> QActionGroup:
 
 def shortcut_table(actions: dict[str, QAction]) -> dict[str, list[tuple[str, str]]]:
     """Menu by menu, each command's keys as the platform writes them, and its name."""
+    from fourcount.wording.patient_labels import OUTCOME_MENU, PICTURE_MENU
+
+    names = labels.MENUS | {"forms": labels.FORM_MENU, "picture": PICTURE_MENU, "outcomes": OUTCOME_MENU}
+    words = command_names()
     menus: dict[str, list[tuple[str, str]]] = {}
-    for command in (*COMMANDS, *FORM_COMMANDS):
+    for command in (*COMMANDS, *LATER_COMMANDS, *FORM_COMMANDS):
         keys = actions[command.key].shortcut().toString(QKeySequence.SequenceFormat.NativeText)
-        menu = labels.MENUS.get(command.menu, labels.FORM_MENU).replace("&", "")
-        menus.setdefault(menu, []).append((keys, labels.COMMANDS[command.key].replace("&", "")))
+        menu = names[command.menu].replace("&", "")
+        menus.setdefault(menu, []).append((keys, words[command.key].replace("&", "")))
     return menus

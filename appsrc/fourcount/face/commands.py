@@ -15,13 +15,13 @@ from fourcount.face.own_choices import OwnChoices
 from fourcount.face.session import Session
 from fourcount.ink.style import Style
 from fourcount.record import editing
-from fourcount.record.outcome import CELLS, Design, Effect, Form, Layout, Outcome, PaperMeasure, form_of
+from fourcount.record.outcome import CELLS, Design, Form, Layout, Outcome, PaperMeasure, form_of
 from fourcount.record.paper import Choices, Family, Record
 from fourcount.wording import labels, numbers
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import CheckFindings
-    from fourcount.face.for_one_patient import PictureView
+    from fourcount.face.patient.figures import Figures
     from fourcount.record.entry.readings import Pasted
 
 
@@ -32,8 +32,15 @@ CHOOSING: dict[str, Callable[..., Any]] = {
     "adjusted_measure": editing.with_adjusted_measure,
     "paper_measure": editing.with_paper_measure,
     "of_total": editing.with_of_total,
+    "effect": editing.with_effect,
+    "start_kind": editing.with_start_kind,
+    "certainty": editing.with_certainty,
+    "on_handout": editing.with_on_handout,
+    "line_kind": editing.with_line_kind,
+    "line_scale": editing.with_line_scale,
+    "line_side": editing.with_line_side,
 }
-"""What takes the choices of rows that are not always there."""
+"""What takes the choices of rows that are not always there, and those of the patient's column."""
 
 
 USUAL_MEASURES = ("risk_ratio", "odds_ratio", "rate_ratio")
@@ -64,7 +71,7 @@ class Commands(QObject):
         self._session = session
         self._style = style
         self._window = window
-        self.picture: PictureView | None = None
+        self.figures: Figures | None = None
         self.own = OwnChoices(session)
         self._origin = session.outcome
         self._stepped: tuple[str, Outcome] | None = None
@@ -153,10 +160,6 @@ class Commands(QObject):
         """Run the groups down or across."""
         self._session.change_outcome(editing.with_layout(self._session.outcome, key))
 
-    def choose_effect(self, key: Effect) -> None:
-        """Take the effect that is carried to the patient."""
-        self._session.change_outcome(editing.with_effect(self._session.outcome, key))
-
     def choose_family(self, key: Family) -> None:
         """Take a family of intervals."""
         self._take_own(editing.with_family(self._session.record, key))
@@ -182,7 +185,7 @@ class Commands(QObject):
     def copy_picture(self) -> None:
         """Copy the picture of the patient as people, or as bars where it is drawn so."""
         self._session.settle()
-        picture = self.picture.picture if self.picture else None
+        picture = self.figures.drawn if self.figures else None
         self._tell("copy-picture", clipboard.copy_picture(self._session, picture, self._style))
 
     def take_table(self, field: str, text: str) -> bool:

@@ -27,8 +27,11 @@ class CursorKeeper(QObject):
     def focus_wanted(self, key: str) -> None:
         """Go to the field with a key, wherever it stands."""
         window = self._window
-        others = (window.header.title, window.header.source, window.patient.baseline, window.patient.source)
-        field = window.printed.field_named(key) or next((field for field in others if field.field == key), None)
+        heads = (window.header.title, window.header.source)
+        head: TextField | None = next((field for field in heads if field.field == key), None)
+        field = (
+            head or window.patient.field_named(key) or window.says.field_named(key) or window.printed.field_named(key)
+        )
         if field:
             field.setFocus(Qt.FocusReason.OtherFocusReason)
 
@@ -37,8 +40,20 @@ class CursorKeeper(QObject):
         self._go_to(self._window.printed.first_field)
 
     def to_baseline(self) -> None:
-        """Go to the starting risk."""
-        self._go_to(self._window.patient.baseline)
+        """Go to the starting risk, however it is given."""
+        self._go_to(self._window.patient.first_field)
+
+    def to_outcome(self) -> None:
+        """Go to the name of an outcome that begins."""
+        self._go_to(self._window.printed.name)
+
+    def to_own_line(self) -> None:
+        """Go to the reader's own line, drawn anew where there was none."""
+        if self._window.session.outcome.line_kind == "none":
+            self._window.commands.choose("line_kind", "matters")
+        field = self._window.says.field_named("line_text")
+        if field:
+            self._go_to(field)
 
     def to_paper(self) -> None:
         """Go to what the paper says."""

@@ -271,12 +271,18 @@ class ChoiceField(QComboBox):
             self.setCurrentIndex(index)
             self.updateGeometry()
 
-    def show_words(self, words: dict[str, str]) -> None:
-        """Give some of the choices other words."""
-        for key, text in words.items():
-            index = self.findData(key)
-            if self.itemText(index) != text:
-                self.setItemText(index, text)
+    def show_choices(self, choices: Sequence[tuple[object, str]]) -> None:
+        """Offer these choices; the one chosen stays so, where it is still there."""
+        if [self.itemData(place) for place in range(self.count())] != [key for key, _ in choices]:
+            chosen = self.currentData()
+            self.clear()
+            for key, text in choices:
+                self.addItem(text, key)
+            self.show_choice(chosen)
+        for place, (_, text) in enumerate(choices):
+            if self.itemText(place) != text:
+                self.setItemText(place, text)
+                self.updateGeometry()
 
     def showPopup(self) -> None:
         from fourcount.face.printed.specimens import show_notes

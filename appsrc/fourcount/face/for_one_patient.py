@@ -4,13 +4,10 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QSize, Signal
-from PySide6.QtGui import QPainter, QPaintEvent
-from PySide6.QtWidgets import QGridLayout, QSizePolicy, QVBoxLayout, QWidget
+from PySide6.QtCore import Signal
+from PySide6.QtWidgets import QGridLayout, QVBoxLayout, QWidget
 
 from fourcount.face.fields import ChoiceField, FieldsView, TextField
-from fourcount.face.flow import FlowLayout
-from fourcount.face.links import Link
 from fourcount.face.look import Look
 from fourcount.face.text import Words
 from fourcount.record.outcome import Outcome
@@ -20,72 +17,38 @@ from fourcount.wording.standing import STANDING
 
 if TYPE_CHECKING:
     from PySide6.QtGui import QAction
+    from PySide6.QtWidgets import QMenu
 
     from fourcount.appraisal.findings import OutcomeFindings
-    from fourcount.ink.picture import Picture
+    from fourcount.face.patient.figures import Figures
+    from fourcount.face.patient.quiet_rows import QuietRows
+    from fourcount.face.patient.start import StartFields
+    from fourcount.picture.options import PictureOptions
+
+KIND_MARK = 17
+"""Pixels at 100% text that are kept beside the name of the starting risk for the mark of a choice."""
 
 
-class PictureView(QWidget):
-    """The picture as one object: painted, and described in a full sentence."""
+class ForOnePatient(FieldsView):
+    """Starting risk and the effect that is carried to it; all under them is made once the window has painted.
+
+    **Signals**
+        chosen: a choice was made. Carries the outcome's field and the choice.
+    """
+
+    chosen = Signal(str, object)
+
+    start: StartFields
+    quiet: QuietRows
+    figures: Figures
+    options: PictureOptions
 
     def __init__(self, look: Look) -> None:
         super().__init__()
         self._look = look
-        self.picture: Picture | None = None
-        policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
-        policy.setHeightForWidth(True)
-        self.setSizePolicy(policy)
-        self.hide()
-        look.changed.connect(self._on_look_changed)
-
-    def show_picture(self, picture: Picture | None, sentence: str) -> None:
-        """Show a picture, or nothing; an equal one changes nothing."""
-        if picture is not None and picture == self.picture:
-            return
-        self.picture = picture
-        self.setAccessibleName(labels.COLUMNS["patient"])
-        self.setAccessibleDescription(sentence)
-        self.setVisible(picture is not None)
-        self.updateGeometry()
-        self.update()
-
-    def hasHeightForWidth(self) -> bool:
-        return True
-
-    def heightForWidth(self, width: int) -> int:
-        return self.picture.height(self._look, width) if self.picture else 0
-
-    def sizeHint(self) -> QSize:
-        return QSize(self._look.px(280), self.heightForWidth(max(self.width(), self._look.px(200))))
-
-    def minimumSizeHint(self) -> QSize:
-        return QSize(0, self.heightForWidth(self.width()))
-
-    def paintEvent(self, event: QPaintEvent) -> None:
-        if self.picture:
-            painter = QPainter(self)
-            self.picture.draw(painter, self._look, 0, 0, self.width())
-            painter.end()
-
-    def _on_look_changed(self) -> None:
-        self.updateGeometry()
-        self.update()
-
-
-class ForOnePatient(FieldsView):
-    """Starting risk, the effect that is carried to it, the picture, and what it comes to.
-
-    **Signals**
-        effect_chosen: the effect to carry was chosen. Carries its key.
-    """
-
-    effect_chosen = Signal(object)
-
-    def __init__(self, look: Look, actions: dict[str, QAction]) -> None:
-        super().__init__()
-        self._look = look
-        self._bars = False
+        self._awake = False
         self.takes_a_risk = True
+        self.has_curve = False
         self.setAccessibleName(labels.COLUMNS["patient"])
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self.baseline = TextField(look, "starting_risk_text", labels.FIELDS["starting_risk_text"], role="total")
@@ -95,27 +58,68 @@ class ForOnePatient(FieldsView):
             labels.FIELDS["starting_risk_source_text"],
             labels.HINTS["starting_risk_source_text"],
         )
-        self.effect = ChoiceField(look, labels.FIELDS["effect"], tuple(labels.EFFECTS.items()))
+        self.effect = ChoiceField(look, labels.FIELDS["effect"], (("usual", labels.EFFECTS["risk_ratio"]),))
         self.mark = Words(look, "small", "caution")
         self.waits = Words(look, "body", "muted", labels.PATIENT_WAITS)
-        self.picture = PictureView(look)
-        self.summary = Words(look, "strong", selectable=True)
-        self.detail = Words(look, "body", "muted", selectable=True)
-        self.copy = Link(look, labels.LINK_WORDS["copy-picture"], actions["copy-picture"])
         self.standing: Words | None = None
         self._build()
-        self._connect_all()
+        self._pass_on(self.baseline, self.source)
+        self.effect.chosen.connect(self._on_effect)
+        look.changed.connect(self._on_look_changed)
+
+    def wake(self, actions: dict[str, QAction], menu: QMenu, options: PictureOptions) -> None:
+        """Make what no first paint needs; ``menu`` offers how the picture is drawn."""
+        from fourcount.face.patient.figures import Figures
+        from fourcount.face.patient.quiet_rows import QuietRows
+        from fourcount.face.patient.start import StartFields
+
+        self.options = options
+        self.start = StartFields(self._look, self._fields, self._start_area, self.baseline, self.source)
+        self.start.setParent(self)
+        self.start.kind_chosen.connect(self._on_kind)
+        self.names["starting_risk_text"].hide()
+        self.figures = Figures(self._look, actions, menu)
+        self.figures.hide()
+        rows = QVBoxLayout()
+        self._column.insertLayout(2, rows)
+        self.quiet = QuietRows(self._look, {"span": rows})
+        self.quiet.hide()
+        self.quiet.chosen.connect(self.chosen)
+        self.quiet.made.connect(self._chain)
+        self._pass_on(self.start, self.quiet)
+        self._column.insertWidget(self._column.indexOf(self.waits) + 1, self.quiet)
+        self._column.insertWidget(self._column.indexOf(self.waits) + 1, self.figures)
+        self._awake = True
+        self._chain()
+
+    @property
+    def fields(self) -> tuple[TextField, ...]:
+        """Every text field of the column that was made so far."""
+        if not self._awake:
+            return (self.baseline, self.source)
+        return (*self.start.fields, self.source, *self.quiet.fields)
+
+    @property
+    def first_field(self) -> TextField:
+        """Where typing the starting risk begins, however it is given."""
+        return self.start.shown[0] if self._awake else self.baseline
+
+    def field_named(self, key: str) -> TextField | None:
+        """The field of this column with a key, its row opened where it has one."""
+        return self.quiet.open_for(key) or next(
+            (field for field in self.fields if field.field == key and field.isVisible()), None
+        )
 
     def show_state(self, record: Record, outcome: Outcome, findings: OutcomeFindings | None) -> None:
         """Show the patient's fields; with findings, the picture and its sentences."""
-        self.baseline.show_text(outcome.patient.starting_risk_text)
-        self.source.show_text(outcome.patient.starting_risk_source_text)
-        self.effect.show_choice(outcome.patient.effect)
         self._shown = (outcome, findings, record.choices) if findings else None
-        if findings is None:
-            self.baseline.setPlaceholderText("")
+        self.source.show_text(outcome.patient.starting_risk_source_text)
+        if not self._awake:
+            self.baseline.show_text(outcome.patient.starting_risk_text)
             return
-        self._show_findings(outcome, findings, record.choices)
+        self.start.show_state(outcome.patient)
+        if findings is not None:
+            self._show_findings(outcome, findings, record.choices)
 
     def show_standing(self, shown: bool) -> None:
         """Show at the end of the page what always holds, where the strip of cautions has no room for it."""
@@ -125,61 +129,67 @@ class ForOnePatient(FieldsView):
         if self.standing:
             self.standing.setVisible(shown)
 
-    def set_bars(self, bars: bool) -> None:
-        """Draw a bar pair instead of people, or people again."""
-        self._bars = bars
+    def set_options(self, options: PictureOptions) -> None:
+        """Draw the picture in another way."""
+        self.options = options
         if self._shown:
             self._show_findings(*self._shown)
 
     def _show_findings(self, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> None:
-        from fourcount.face.patient_view import patient_view
+        from fourcount.face.patient_view import PATIENT_MARKS, patient_view
 
-        view = patient_view(outcome, findings, choices, self._bars)
+        view = patient_view(outcome, findings, choices, self.options)
         self.baseline.setPlaceholderText(view.baseline_hint)
         own = view.own_risk and not outcome.patient.starting_risk_text.strip()
         hint = labels.OWN_RISK_SOURCE if own else labels.HINTS["starting_risk_source_text"]
         self.source.setPlaceholderText(hint)
-        self.effect.show_words(view.effect_words)
+        self.effect.show_choices(view.effects)
         self.effect.show_choice(view.effect)
-        self.effect.setEnabled(view.effect_is_free)
-        self.takes_a_risk = view.takes_a_risk
-        for widget in (*self._names, self.baseline, self.source, self.effect):
-            widget.setVisible(view.takes_a_risk)
-        self.baseline.show_mark(view.mark)
-        self.mark.show_words(view.mark)
+        self.effect.setEnabled(len(view.effects) > 1)
+        self.takes_a_risk, self.has_curve = view.takes_a_risk, view.to_curve
+        for part in (self.start, self.quiet):
+            part.show_marks(view.marks)
+        marked = [text for field, text in view.marks.items() if field in PATIENT_MARKS]
+        self.mark.show_words("\n".join(dict.fromkeys(marked)))
         self.waits.show_words(view.waits)
-        self.picture.show_picture(view.picture, view.sentence)
-        self.summary.show_words(view.summary)
-        self.detail.show_words(view.detail)
-        self.copy.setVisible(view.picture is not None)
+        self.quiet.setVisible(not view.waits)
+        self.quiet.show_state(outcome, self._fields.columnMinimumWidth(0))
+        self.figures.show_view(view)
+        self.figures.setVisible(not view.waits)
 
     def _build(self) -> None:
         self._fields = QGridLayout()
         self._fields.setContentsMargins(0, 0, 0, 0)
         self._fields.setColumnStretch(1, 1)
         names = ("starting_risk_text", "starting_risk_source_text", "effect")
-        self._names = [Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False) for name in names]
-        for row, words in enumerate(self._names):
+        self.names = {name: Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False) for name in names}
+        for row, words in enumerate(self.names.values()):
             self._fields.addWidget(words, row, 0)
-        self._fields.addWidget(self.baseline, 0, 1)
+        self._start_area = QGridLayout()
+        self._start_area.addWidget(self.baseline, 1, 0)
+        self._fields.addLayout(self._start_area, 0, 1)
         self._fields.addWidget(self.source, 1, 1)
         self._fields.addWidget(self.effect, 2, 1)
-        copies = FlowLayout(self._look)
-        copies.addWidget(self.copy)
         self._column = QVBoxLayout(self)
         self._column.addWidget(Words(self._look, "head", "muted", labels.COLUMNS["patient"], wraps=False))
         self._column.addLayout(self._fields)
-        for widget in (self.mark, self.waits, self.picture, self.summary, self.detail):
+        for widget in (self.mark, self.waits):
             self._column.addWidget(widget)
-        self._column.addLayout(copies)
         self._column.addStretch(1)
-        self.copy.hide()
         self._on_look_changed()
 
-    def _connect_all(self) -> None:
-        self._pass_on(self.baseline, self.source)
-        self.effect.chosen.connect(self.effect_chosen)
-        self._look.changed.connect(self._on_look_changed)
+    def _chain(self) -> None:
+        """Tab goes through the column in reading order."""
+        before: QWidget = self.source
+        for widget in (self.effect, *self.quiet.stops_at_home, *self.figures.stops, *self.quiet.stops):
+            QWidget.setTabOrder(before, widget)
+            before = widget
+
+    def _on_effect(self, key: object) -> None:
+        self.chosen.emit("effect", key)
+
+    def _on_kind(self, key: object) -> None:
+        self.chosen.emit("start_kind", key)
 
     def _on_look_changed(self) -> None:
         px = self._look.px
@@ -187,3 +197,7 @@ class ForOnePatient(FieldsView):
         self._column.setSpacing(px(12))
         self._fields.setHorizontalSpacing(px(12))
         self._fields.setVerticalSpacing(px(4))
+        self._start_area.setHorizontalSpacing(px(12))
+        self._start_area.setVerticalSpacing(px(1))
+        widest = max(words.sizeHint().width() for words in self.names.values())
+        self._fields.setColumnMinimumWidth(0, widest + px(KIND_MARK))

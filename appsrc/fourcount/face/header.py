@@ -1,6 +1,8 @@
-"""The line under the menus: the paper's title, where its numbers stand, and short notices."""
+"""The line under the menus: the paper's title, where its numbers stand, its outcomes, and short notices."""
 
 from __future__ import annotations
+
+from typing import TYPE_CHECKING
 
 from PySide6.QtCore import Qt, QTimer
 from PySide6.QtGui import QPainter, QPaintEvent, QResizeEvent
@@ -12,6 +14,9 @@ from fourcount.face.look import Look
 from fourcount.face.text import Words
 from fourcount.record.paper import Record
 from fourcount.wording import labels
+
+if TYPE_CHECKING:
+    from fourcount.face.outcomes_bar import OutcomesBar
 
 NOTICE_STAYS = 6_000
 """Milliseconds for which a notice stays."""
@@ -35,7 +40,7 @@ class Hairline(QWidget):
 
 
 class Header(FieldsView):
-    """Title and source, and at the right a notice of what was just done."""
+    """Title and source, and at the right the paper's outcomes, with a notice of what was just done before them."""
 
     def __init__(self, look: Look) -> None:
         super().__init__()
@@ -51,15 +56,25 @@ class Header(FieldsView):
         self._timer.timeout.connect(self._on_notice_over)
         self.notice.setSizePolicy(QSizePolicy.Policy.Ignored, QSizePolicy.Policy.Preferred)
         self.notice.setAlignment(Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter)
+        self.bar: OutcomesBar | None = None
         self._narrow = False
+        self._right = QHBoxLayout()
+        self._right.addWidget(self.notice, 1)
         self._row = QBoxLayout(QBoxLayout.Direction.LeftToRight, self)
         self._row.addWidget(self.title, 5)
-        self._row.addWidget(self.source, 5)
-        self._row.addWidget(self.notice, 4)
+        self._row.addWidget(self.source, 4)
+        self._row.addLayout(self._right, 6)
         self.setSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Fixed)
         self._pass_on(self.title, self.source)
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
+
+    def take_bar(self, bar: OutcomesBar) -> None:
+        """Put the outcomes of the paper at the right end."""
+        self.bar = bar
+        self._right.addWidget(bar)
+        QWidget.setTabOrder(self.source, bar.tabs)
+        QWidget.setTabOrder(bar.tabs, bar.plus)
 
     def tell(self, notice: str) -> None:
         """Show a notice for a while, in room that is kept for it."""
@@ -73,6 +88,16 @@ class Header(FieldsView):
         self.notice.setText(notice)
         self.notice.setAccessibleName(notice)
         self.notice.setVisible(bool(notice) or not self._narrow)
+        self._make_room(self.notice.sizeHint().width() if notice else 0)
+
+    def _make_room(self, needed: int) -> None:
+        """While a long notice stands, what the reader is not typing in steps aside for it."""
+        bar = self.bar.sizeHint().width() + self._right.spacing() if self.bar else 0
+        room = (self.width() - self._row.contentsMargins().left() * 2 - self._row.spacing() * 2) * 6 // 15 - bar
+        aside = not self._narrow and needed > max(room, 0)
+        typing = self.title if self.source.hasFocus() else self.source
+        for field in (self.title, self.source):
+            field.setVisible(not (aside and field is typing))
 
     def resizeEvent(self, event: QResizeEvent) -> None:
         super().resizeEvent(event)
@@ -103,6 +128,7 @@ class Header(FieldsView):
         px = self._look.px
         self._row.setContentsMargins(px(24), px(5), px(24), px(5))
         self._row.setSpacing(px(2 if self._narrow else 16))
+        self._right.setSpacing(px(16))
         self._fit()
 
 

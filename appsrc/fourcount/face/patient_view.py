@@ -2,69 +2,82 @@
 
 from __future__ import annotations
 
-from typing import NamedTuple
+from collections.abc import Mapping
+from types import MappingProxyType
+from typing import Any, NamedTuple
 
-from fourcount.appraisal.findings import (
-    AnyNumberNeeded,
-    Figure,
-    Gap,
-    OutcomeFindings,
-    PatientFindings,
-    StrataFindings,
-)
-from fourcount.ink.picture import KeyEntry, Picture, PictureWords, Side
-from fourcount.picture.plan import Plan, plan
-from fourcount.picture.scales import risk_scale
-from fourcount.record.outcome import COUNTED_FORMS, FORMS, Effect, Form, Outcome
+from fourcount.appraisal.findings import Carriable, Gap, OutcomeFindings, PatientFindings
+from fourcount.ink.patient_picture import picture_of, relative_picture_of
+from fourcount.ink.picture import Picture
+from fourcount.ink.relative_picture import RelativePicture
+from fourcount.picture.options import USUAL, PictureOptions
+from fourcount.record.outcome import COUNTED_FORMS, Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import labels, numbers
-from fourcount.wording.axis import axis_words
+from fourcount.wording.effects import carriable_words
 from fourcount.wording.form import lacking
 from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.names import effect_name, sentence_case
-from fourcount.wording.patient import WHICH_PEOPLE, PatientWords, patient_words
-
-WAITS = {form: labels.PATIENT_WAITS_OTHERWISE for form in FORMS if form not in COUNTED_FORMS}
-"""What the column says while the table is not whole, where that is not four counts."""
-
-CARRY_NOTHING: tuple[Form, ...] = ("pairs", "person-time")
-"""Forms of which nothing is carried to one patient, whatever is typed."""
+from fourcount.wording.patient import WHICH_PEOPLE, patient_words
+from fourcount.wording.patient_labels import TABLE_CORNER, TABLE_ROW
+from fourcount.wording.patient_table import Row, patient_table, patient_table_head, people_of
 
 
 class PatientView(NamedTuple):
-    """Everything that the column shows."""
+    """Everything that the column shows; ``marks`` are sentences by the field that they mark."""
 
-    baseline_hint: str
-    own_risk: bool
-    effect: str
-    effect_words: dict[str, str]
-    effect_is_free: bool
+    baseline_hint: str = ""
+    own_risk: bool = False
+    effect: str = ""
+    effects: tuple[tuple[str, str], ...] = ()
     takes_a_risk: bool = True
-    mark: str = ""
+    marks: Mapping[str, str] = MappingProxyType({})
     waits: str = ""
     picture: Picture | None = None
+    relative: RelativePicture | None = None
     sentence: str = ""
     summary: str = ""
     detail: str = ""
+    rows: tuple[Row, ...] = ()
+    rows_corner: str = ""
+    rows_sentence: str = ""
+    to_curve: bool = False
 
 
-def patient_view(outcome: Outcome, findings: OutcomeFindings, choices: Choices, bars: bool) -> PatientView:
-    """The column for an outcome and its findings; ``bars`` asks for bars instead of people."""
-    marks = {mark.field: mark_text(mark) for mark in findings.marks}
+def patient_view(
+    outcome: Outcome, findings: OutcomeFindings, choices: Choices, options: PictureOptions = USUAL
+) -> PatientView:
+    """The column for an outcome and its findings; ``options`` say how the picture is drawn."""
+    waiting = lacking(findings) is not None
     view = PatientView(
-        baseline_hint=_baseline_hint(outcome, findings),
+        baseline_hint=_baseline_hint(outcome, findings, waiting),
         own_risk=_own_risk(outcome, findings),
         effect=_effect(outcome, findings),
-        effect_words=_effect_words(outcome, findings),
-        effect_is_free=outcome.design != "case-control" and findings.form in (*COUNTED_FORMS, "strata"),
-        takes_a_risk=_takes_a_risk(findings),
-        mark=marks.get("starting_risk_text", ""),
+        effects=_effects(outcome, findings),
+        takes_a_risk=waiting or bool(findings.carriable),
+        marks={mark.field: mark_text(mark) for mark in findings.marks},
+        to_curve=bool(findings.carriable),
     )
-    if lacking(findings) is not None:
-        return view._replace(waits=WAITS.get(findings.form, labels.PATIENT_WAITS))
-    if isinstance(findings.patient, Gap):
-        return view if view.mark else view._replace(waits=gap_text(findings.patient))
-    return _with_patient(view, outcome, findings, findings.patient, choices, bars)
+    if waiting:
+        counted = findings.form in COUNTED_FORMS
+        return view._replace(waits=labels.PATIENT_WAITS if counted else labels.PATIENT_WAITS_OTHERWISE)
+    patient = findings.patient
+    if isinstance(patient, Gap):
+        told = any(field in view.marks for field in PATIENT_MARKS)
+        return view if told else view._replace(waits=gap_text(patient))
+    return _with_patient(view, outcome, findings, patient, choices, options)
+
+
+PATIENT_MARKS = (
+    "starting_risk_text",
+    "low_risk_text",
+    "high_risk_text",
+    "rate_text",
+    "overall_risk_text",
+    "exposed_share_text",
+    "other_span_text",
+)
+"""The column's fields that can be marked; the sentences stand under them."""
 
 
 def _with_patient(
@@ -73,95 +86,77 @@ def _with_patient(
     findings: OutcomeFindings,
     patient: PatientFindings,
     choices: Choices,
-    bars: bool,
+    options: PictureOptions,
 ) -> PatientView:
-    drawn = _plan(patient)
-    words = patient_words(outcome, findings, choices, drawn.denominator if drawn else None)
+    picture = picture_of(outcome, findings, choices, options)
+    people = picture.plan.denominator if picture else None
+    words = patient_words(outcome, findings, choices, people)
     missing = labels.MISSING.format(names=", ".join(words.missing)) if words.missing else ""
     range_words = f"{sentence_case(words.summary)}." if words.summary else ""
-    which = WHICH_PEOPLE if drawn else ""
+    which = WHICH_PEOPLE if picture else ""
     detail = " ".join(part for part in (range_words, words.detail, which) if part)
-    lines = (words.basis, words.summary_bold, detail)
-    picture = Picture(drawn, _picture_words(words, lines, drawn), bars) if drawn else None
+    if picture:
+        lines = tuple(line for line in (words.basis, words.summary_bold, detail) if line)
+        picture = Picture(picture.plan, picture.words._replace(lines=lines), options)
     return view._replace(
         picture=picture,
+        relative=relative_picture_of(outcome, findings) if options.relative else None,
         sentence=words.picture_sentence,
         summary=words.summary_bold,
         detail="\n".join(part for part in (detail, missing) if part),
+        **_table(outcome, findings, patient, choices, people),
     )
 
 
-def _plan(patient: PatientFindings) -> Plan | None:
-    without, with_ = patient.without.estimate, patient.with_.estimate
-    if isinstance(without, Gap) or isinstance(with_, Gap):
-        return None
-    return plan(without, with_)
-
-
-def _picture_words(words: PatientWords, lines: tuple[str, ...], drawn: Plan) -> PictureWords:
-    low, _, high = axis_words("risk", risk_scale((drawn.without_risk, drawn.with_risk)).high)
-    entries = (
-        KeyEntry("affected", words.key_event),
-        KeyEntry("avoided", words.key_avoided),
-        KeyEntry("added", words.key_added),
-        KeyEntry("others", words.key_other),
+def _table(
+    outcome: Outcome, findings: OutcomeFindings, patient: PatientFindings, choices: Choices, people: int | None
+) -> dict[str, Any]:
+    """The rows of the small table, of how many people they speak, and all of it in sentences."""
+    rows = patient_table(outcome, findings, choices, people)
+    heads = patient_table_head(outcome, findings, choices, people)
+    said = (
+        TABLE_ROW.format(
+            label=row.label,
+            figures=", ".join(f"{head}: {cell}" for head, cell in zip(heads[1:], row[1:], strict=True) if cell),
+        )
+        for row in rows
     )
-    return PictureWords(
-        without=Side(words.without_title, words.without_count, f"({words.without_percent})", words.without_other),
-        with_=Side(words.with_title, words.with_count, f"({words.with_percent})", words.with_other),
-        key=tuple(entry for entry in entries if entry.text),
-        note=words.scale,
-        lines=tuple(line for line in lines if line),
-        bar_ends=(low, high),
-    )
-
-
-def _takes_a_risk(findings: OutcomeFindings) -> bool:
-    """Whether a starting risk would come to anything: some forms carry nothing to a patient."""
-    gap = findings.patient
-    return findings.form not in CARRY_NOTHING and not (isinstance(gap, Gap) and gap.key == "carried-later")
+    corner = TABLE_CORNER.format(people=numbers.whole(people_of(patient, people)))
+    return {"rows": tuple(rows), "rows_corner": corner, "rows_sentence": " ".join(said)}
 
 
 def _own_risk(outcome: Outcome, findings: OutcomeFindings) -> bool:
     """Whether an empty starting risk stands for the study's own."""
     if isinstance(findings.patient, PatientFindings):
-        return findings.patient.baseline_from == "reference"
+        return findings.patient.start_from == "reference"
     return outcome.design != "case-control" and findings.form in COUNTED_FORMS
 
 
+def _baseline_hint(outcome: Outcome, findings: OutcomeFindings, waiting: bool) -> str:
+    """The study's own risk while the field is empty, or that one has to be typed."""
+    patient = findings.patient
+    if isinstance(patient, PatientFindings):
+        own = patient.start_from == "reference" and not isinstance(patient.without.estimate, Gap)
+        return labels.BASELINE_HINT.format(percent=numbers.percent(patient.baseline)) if own else ""
+    outside = outcome.design == "case-control" or findings.form in ("effect-only", "strata")
+    return labels.BASELINE_HINT_NEEDED if outside or (findings.carriable and not waiting) else ""
+
+
+def _key(one: Carriable) -> str:
+    """Under which key of ``EFFECTS`` an effect is chosen."""
+    return "adjusted" if one.adjusted else one.effect
+
+
 def _effect(outcome: Outcome, findings: OutcomeFindings) -> str:
-    """The effect that is carried: the one chosen, unless design or print leave no choice."""
-    if isinstance(findings.patient, PatientFindings):
-        return findings.patient.effect
-    if outcome.design == "case-control" or (findings.form == "effect-only" and outcome.paper_measure == "odds_ratio"):
-        return "odds_ratio"
-    return outcome.patient.effect
+    """The effect that is carried: the one chosen where it is there, else the usual one."""
+    keys = [_key(one) for one in findings.carriable]
+    return outcome.patient.effect if outcome.patient.effect in keys or not keys else keys[0]
 
 
-def carried_measure(findings: OutcomeFindings, key: str) -> Figure | AnyNumberNeeded | Gap | None:
-    """The measure that stands for an effect: the pooled one where there are strata."""
-    pooled = findings.strata.pooled if isinstance(findings.strata, StrataFindings) else {}
-    return pooled.get(f"pooled_{key}") or findings.measures.get(key)
-
-
-def _baseline_hint(outcome: Outcome, findings: OutcomeFindings) -> str:
-    if outcome.design == "case-control" or findings.form in ("effect-only", "strata"):
-        return labels.BASELINE_HINT_NEEDED
-    if findings.form not in (*COUNTED_FORMS, "risk-at-time"):
-        return ""
-    risk = findings.measures.get("risk_reference")
-    if isinstance(risk, Figure) and not isinstance(risk.estimate, Gap):
-        return labels.BASELINE_HINT.format(percent=numbers.percent(risk.estimate))
-    return ""
-
-
-def _effect_words(outcome: Outcome, findings: OutcomeFindings) -> dict[str, str]:
-    """The choices of effect with the study's own estimates in them."""
-    result: dict[str, str] = {}
-    effects: tuple[Effect, ...] = ("risk_ratio", "odds_ratio")
-    for key in effects:
-        figure, name = carried_measure(findings, key), effect_name(outcome, key)
-        result[key] = name
-        if isinstance(figure, Figure) and not isinstance(figure.estimate, Gap):
-            result[key] = labels.EFFECT_KEPT.format(effect=name, value=numbers.ratio(figure.estimate))
-    return result
+def _effects(outcome: Outcome, findings: OutcomeFindings) -> tuple[tuple[str, str], ...]:
+    """What can be chosen, with the study's own estimates; the usual one's name while there is nothing to choose."""
+    if findings.carriable:
+        return tuple((_key(one), carriable_words(outcome, one)) for one in findings.carriable)
+    chosen = outcome.patient.effect
+    odds = outcome.design in ("case-control", "matched") or chosen == "odds_ratio"
+    return ((chosen, effect_name(outcome, "odds_ratio" if odds else "risk_ratio")),)

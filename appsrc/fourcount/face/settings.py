@@ -4,11 +4,15 @@ from __future__ import annotations
 
 import os
 from pathlib import Path
+from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QByteArray, QSettings, QStandardPaths
 
 from fourcount.face.look import APPEARANCES, ZOOMS
 from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices
+
+if TYPE_CHECKING:
+    from fourcount.picture.options import Arrangement, Icons
 
 FOLDER_VARIABLE = "FOURCOUNT_SETTINGS_FOLDER"
 """An environment variable that names another folder for settings and log."""
@@ -54,6 +58,14 @@ class Settings:
             level = 0.95
         known = next((name for name in FAMILIES if name == family), FAMILIES[0])
         return Choices(family=known, level=level if LOWEST_LEVEL <= level <= HIGHEST_LEVEL else Choices().level)
+
+    def drawing(self) -> tuple[Icons, Arrangement]:
+        """How people are drawn, and how the groups of a picture stand, as last chosen."""
+        from fourcount.picture.options import ARRANGEMENTS, ICONS  # no first paint draws a picture
+
+        icons, arrangement = str(self._store.value("icons", "")), str(self._store.value("arrangement", ""))
+        known = next((name for name in ICONS if name == icons), ICONS[0])
+        return known, next((name for name in ARRANGEMENTS if name == arrangement), ARRANGEMENTS[0])
 
     def keep(self, **values: object) -> None:
         """Remember values by name."""

@@ -8,7 +8,7 @@ from typing import TYPE_CHECKING
 from PySide6.QtCore import QTimer, Signal
 from PySide6.QtWidgets import QVBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField
+from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.links import Link
 from fourcount.face.look import Look
@@ -22,6 +22,7 @@ if TYPE_CHECKING:
 
     from fourcount.appraisal.findings import OutcomeFindings
     from fourcount.face.measure_row import ColumnHead, MeasureRow
+    from fourcount.face.own_line import OwnLineRow
     from fourcount.wording.lines import MeasureLine
 
 PRINTED_INTERVALS = ("effect-only", "risk-at-time")
@@ -31,14 +32,16 @@ WORKING_PAUSE = 120
 """Milliseconds without a key after which an open working is computed anew."""
 
 
-class WhatItSays(QWidget):
-    """Sentence, rows of measures, the choice of family and level.
+class WhatItSays(FieldsView):
+    """Sentence, rows of measures, the choice of family and level, and a line of the reader's own.
 
     **Signals**
+        chosen: a choice of the reader's own line was made. Carries the outcome's field and the choice.
         family_chosen: a family of intervals was chosen. Carries its key.
         level_chosen: a level was chosen. Carries its fraction.
     """
 
+    chosen = Signal(str, object)
     family_chosen = Signal(object)
     level_chosen = Signal(object)
 
@@ -53,6 +56,8 @@ class WhatItSays(QWidget):
         self._working_timer.setInterval(WORKING_PAUSE)
         self._head: ColumnHead | None = None
         self.more_head: Words | None = None
+        self.own_line: OwnLineRow | None = None
+        self.own_line_link: Link | None = None
         self._open = ""
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self._show_more = False
@@ -86,6 +91,42 @@ class WhatItSays(QWidget):
         self._shown = (outcome, findings, record.choices)
         self.sentence.show_words(headline(outcome, findings, record.choices))
         self._show_rows()
+        self._show_own_line(outcome, findings)
+
+    def take_link(self, action: QAction) -> None:
+        """Make the link to the reader's own line, which no first paint needs."""
+        from fourcount.wording.patient_labels import OWN_LINE
+
+        self.own_line_link = Link(self._look, OWN_LINE, action)
+        self.own_line_link.hide()
+        self._choosers.addWidget(self.own_line_link)
+        QWidget.setTabOrder(self.help, self.own_line_link)
+
+    def field_named(self, key: str) -> TextField | None:
+        """The field of the reader's own line, where it is that one and shown."""
+        row = self.own_line
+        return row.text if row and row.text.field == key and row.isVisible() else None
+
+    def _show_own_line(self, outcome: Outcome, findings: OutcomeFindings) -> None:
+        """The row of the line while one is drawn, else the link that opens it."""
+        drawn = outcome.line_kind != "none"
+        if drawn and self.own_line is None:
+            from fourcount.face.own_line import OwnLineRow
+
+            self.own_line = OwnLineRow(self._look)
+            self._pass_on(self.own_line)
+            self.own_line.chosen.connect(self.chosen)
+            self._column.insertWidget(self._column.indexOf(self._choosers) + 1, self.own_line)
+            before: QWidget = self.help
+            for widget in self.own_line.stops:
+                QWidget.setTabOrder(before, widget)
+                before = widget
+        if self.own_line:
+            self.own_line.setVisible(drawn)
+            if drawn:
+                self.own_line.show_state(outcome, findings)
+        if self.own_line_link:
+            self.own_line_link.setVisible(not drawn and bool(self._order))
 
     def set_more(self, more: bool) -> tuple[QWidget, QWidget] | None:
         """Show or hide the measures under the fold; the first and the last row that is new."""
@@ -224,7 +265,7 @@ class WhatItSays(QWidget):
     def _build(self) -> None:
         self._measures = QVBoxLayout()
         self._measures.setSpacing(0)
-        choosers = FlowLayout(self._look, gap=20)
+        self._choosers = choosers = FlowLayout(self._look, gap=20)
         for widget in (self.family, self.level, self.more, self.help):
             choosers.addWidget(widget)
         copies = FlowLayout(self._look, gap=20)

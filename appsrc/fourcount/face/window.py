@@ -6,7 +6,7 @@ from itertools import pairwise
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer, Signal
-from PySide6.QtGui import QAction, QCloseEvent, QIcon, QKeyEvent, QPaintEvent, QResizeEvent
+from PySide6.QtGui import QActionGroup, QCloseEvent, QIcon, QKeyEvent, QPaintEvent, QResizeEvent
 from PySide6.QtWidgets import QApplication, QMainWindow, QVBoxLayout, QWidget
 
 from fourcount.face import actions as commands_table
@@ -29,8 +29,11 @@ from fourcount.wording.standing import STANDING
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
     from fourcount.face.checking import Checking
+    from fourcount.face.collecting import Collecting
     from fourcount.face.commands import Commands
     from fourcount.face.cursor_keeper import CursorKeeper
+    from fourcount.face.outcome_commands import OutcomeCommands
+    from fourcount.face.view_commands import ViewCommands
 
 FIRST_SIZE = QSize(1280, 800)
 ROOM_FOR_A_FRAME = QSize(0, 40)
@@ -47,8 +50,12 @@ class MainWindow(QMainWindow):
 
     first_painted = Signal()
     numbers_ready = Signal()
+    collecting: Collecting
     commands: Commands
     cursor_keeper: CursorKeeper
+    outcomes: OutcomeCommands
+    view: ViewCommands
+    drawing: tuple[QActionGroup, QActionGroup]
     checking: Checking | None = None
 
     def __init__(self, session: Session, look: Look, settings: Settings, later: Later) -> None:
@@ -64,7 +71,7 @@ class MainWindow(QMainWindow):
         self.banner = Banner(look)
         self.printed = AsPrinted(look, self.actions_by_key)
         self.says = WhatItSays(look, self.actions_by_key)
-        self.patient = ForOnePatient(look, self.actions_by_key)
+        self.patient = ForOnePatient(look)
         self.cautions = CautionsStrip(look, STANDING)
         self._build()
         self._connect_all()
@@ -104,15 +111,14 @@ class MainWindow(QMainWindow):
             printed.form, printed.layout_choice, grid.headings["left"], grid.headings["right"], grid.labels["first"],
             grid.labels["second"], *grid.cells.values(), *printed.links, printed.example, says.sentence,
             says.family, says.level, says.more, says.help, *says.copies, patient.baseline,
-            patient.source, patient.effect, patient.summary, patient.detail, patient.copy,
-            self.cautions,
+            patient.source, patient.effect, self.cautions,
         ]  # fmt: skip
         for before, after in pairwise(order):
             self.setTabOrder(before, after)
 
     def _connect_all(self) -> None:
         """All wiring of the window, in one place."""
-        for view in (self.header, self.printed, self.patient):
+        for view in (self.header, self.printed, self.says, self.patient):
             view.edited.connect(self.session.edit_text)
             view.edited.connect(self._show_focus)
             view.left.connect(self.session.end_run)
@@ -125,9 +131,8 @@ class MainWindow(QMainWindow):
         if isinstance(application, QApplication):
             application.focusChanged.connect(self._show_focus)
         self.first_painted.connect(self._on_first_painted)
-        self._appearances.triggered.connect(self._on_appearance_chosen)
 
-    def _connect_commands(self, do: Commands, go: CursorKeeper) -> None:
+    def _connect_commands(self, do: Commands, go: CursorKeeper, among: OutcomeCommands, see: ViewCommands) -> None:
         """The wiring of all that a hand can do but type: nobody can before the first paint."""
         self.printed.design.chosen.connect(do.choose_design)
         self.printed.welcome.chosen.connect(do.choose_welcome)
@@ -143,8 +148,18 @@ class MainWindow(QMainWindow):
         self.printed.example_wanted.connect(do.open_example)
         self.says.family_chosen.connect(do.choose_family)
         self.says.level_chosen.connect(do.choose_level)
-        self.patient.effect_chosen.connect(do.choose_effect)
+        self.says.chosen.connect(do.choose)
+        self.patient.chosen.connect(do.choose)
         do.cell_wanted.connect(go.to_first_cell)
+        if self.checking:
+            self.checking.changed.connect(self._show_check)
+        if self.header.bar:
+            self.header.bar.tabs.looked_at.connect(among.look_at)
+            self.header.bar.tabs.moved.connect(among.move_to)
+        self.drawing[0].triggered.connect(see.take_icons)
+        self.drawing[1].triggered.connect(see.take_arrangement)
+        among.begun.connect(go.to_outcome)
+        among.told.connect(self._on_told)
         do.noticed.connect(self.header.tell)
         do.noticed.connect(self.banner.hide)
         do.told.connect(self._on_told)
@@ -155,15 +170,19 @@ class MainWindow(QMainWindow):
             "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
             "paste": do.paste, "study": go.to_study, "form": go.to_form, "add-row": go.add_row,
             "remove-row": go.remove_row, "adopt": self._on_adopt, "paper": go.to_paper, "level": do.ask_level,
-            "layout": do.change_layout, "clear": do.clear_counts,
-            "first-cell": go.to_first_cell, "baseline": go.to_baseline, "bigger": self._on_bigger,
-            "smaller": self._on_smaller, "actual": self._on_actual, "bars": self._on_bars,
-            "more": self._on_more, "methods": self._on_methods,
-            "keys": self._on_keys, "about": self._on_about,
+            "layout": do.change_layout, "clear": do.clear_counts, "own-line": go.to_own_line,
+            "first-cell": go.to_first_cell, "baseline": go.to_baseline, "bigger": see.bigger,
+            "smaller": see.smaller, "actual": see.actual, "bars": see.bars, "more": see.more,
+            "uncertainty": see.uncertainty, "relative": see.relative, "show-patient": see.show_patient,
+            "handout": see.handout, "curve": see.curve, "methods": see.methods, "keys": see.keys, "about": see.about,
+            "outcome-add": among.add, "outcome-copy": among.copy, "outcome-next": among.next,
+            "outcome-previous": among.previous, "outcome-left": among.move_left,
+            "outcome-right": among.move_right, "outcome-remove": among.remove,
         }  # fmt: skip
         for key, handler in handlers.items():
             self.actions_by_key[key].triggered.connect(handler)
         self.menus["forms"].triggered.connect(go.form_chosen)
+        self._appearances.triggered.connect(see.take_appearance)
 
     # What is shown
 
@@ -183,6 +202,10 @@ class MainWindow(QMainWindow):
         for key in ("add-row", "remove-row"):
             self.actions_by_key[key].setEnabled(isinstance(outcome.table, Strata))
         self.actions_by_key["baseline"].setEnabled(self.patient.takes_a_risk)
+        if self.header.bar:
+            self.header.bar.show_state(record, self.session.view)
+            self.outcomes.show_enabled(self.actions_by_key)
+            self.actions_by_key["curve"].setEnabled(self.patient.has_curve)
         title = record.title_text.strip()
         self.setWindowTitle(labels.TITLED_WINDOW.format(title=title) if title else labels.WINDOW_TITLE)
         if record is not self._shown:
@@ -245,6 +268,8 @@ class MainWindow(QMainWindow):
             return
         own = self.commands.own.choices if self.checking else self.session.record.choices
         self._settings.keep(geometry=self.saveGeometry(), zoom=self.look.zoom, appearance=self.look.appearance)
+        if self.header.bar:
+            self._settings.keep(**self.view.kept)
         self._settings.keep(family=own.family, level=own.level)
         self._later.close()
         super().closeEvent(event)
@@ -261,30 +286,15 @@ class MainWindow(QMainWindow):
 
     def _on_first_painted(self) -> None:
         from fourcount.assets_folder import assets_folder
+        from fourcount.face.waking import wake
 
         self.setWindowIcon(QIcon(str(assets_folder() / "fourcount.png")))
-        self._take_commands()
+        wake(self, self._settings, self._later)
+        self._connect_commands(self.commands, self.cursor_keeper, self.outcomes, self.view)
         self.collecting.take_over()
         self.session.wake()
         self.commands.tell_unusual_choices()
         self._later.load()
-
-    def _take_commands(self) -> None:
-        """Make what acts on the record and moves the cursor, which no first paint needs, and wire it."""
-        from fourcount.face.checking import Checking
-        from fourcount.face.collecting import Collecting
-        from fourcount.face.commands import Commands
-        from fourcount.face.cursor_keeper import CursorKeeper
-
-        self.collecting = Collecting(self)
-        self.page_scroll.take_slim_bar()
-        self.commands = Commands(self.session, self.look, self)
-        self.commands.picture = self.patient.picture
-        self.cursor_keeper = CursorKeeper(self)
-        self.checking = Checking(self.session, self._later, self)
-        self.checking.changed.connect(self._show_check)
-        self.actions_by_key |= commands_table.add_forms(self, self.menus["forms"])
-        self._connect_commands(self.commands, self.cursor_keeper)
 
     def _on_libraries_loaded(self) -> None:
         self.session.announce()
@@ -301,35 +311,6 @@ class MainWindow(QMainWindow):
         self.printed.tell(notice)
         if self.printed.notice:
             self.page_scroll.bring(self.printed.notice, self.printed.notice)
-
-    def _on_bigger(self) -> None:
-        self.look.step_zoom(1)
-
-    def _on_smaller(self) -> None:
-        self.look.step_zoom(-1)
-
-    def _on_actual(self) -> None:
-        self.look.set_zoom(1.0)
-
-    def _on_bars(self, checked: bool) -> None:
-        self.patient.set_bars(checked)
-
-    def _on_more(self, checked: bool) -> None:
-        new = self.says.set_more(checked)
-        if new:
-            self.page_scroll.bring(*new)
-
-    def _on_methods(self) -> None:
-        dialogs.methods_window(self.look, self).show()
-
-    def _on_keys(self) -> None:
-        dialogs.keys_window(self.look, self, commands_table.shortcut_table(self.actions_by_key)).show()
-
-    def _on_about(self) -> None:
-        dialogs.about_window(self.look, self).show()
-
-    def _on_appearance_chosen(self, action: QAction) -> None:
-        self.look.set_appearance(action.data())
 
     def _on_look_changed(self) -> None:
         application = QApplication.instance()

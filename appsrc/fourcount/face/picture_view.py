@@ -1,0 +1,69 @@
+"""A picture in the window: painted as one object, and described in a full sentence."""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING, Protocol
+
+from PySide6.QtCore import QSize
+from PySide6.QtGui import QPainter, QPaintEvent
+from PySide6.QtWidgets import QSizePolicy, QWidget
+
+from fourcount.face.look import Look
+
+if TYPE_CHECKING:
+    from fourcount.ink.style import Style
+
+
+class Drawn(Protocol):
+    """Whatever draws itself at a width."""
+
+    def height(self, style: Style, width: float, /) -> int: ...
+    def draw(self, painter: QPainter, style: Style, x: float, y: float, width: float, /) -> float: ...
+
+
+class PictureView(QWidget):
+    """The picture as one object; as tall as its width asks for."""
+
+    def __init__(self, look: Look, name: str) -> None:
+        super().__init__()
+        self._look = look
+        self.picture: Drawn | None = None
+        policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
+        policy.setHeightForWidth(True)
+        self.setSizePolicy(policy)
+        self.setAccessibleName(name)
+        self.hide()
+        look.changed.connect(self._on_look_changed)
+
+    def show_picture(self, picture: Drawn | None, sentence: str) -> None:
+        """Show a picture, or nothing; an equal one changes nothing."""
+        if sentence != self.accessibleDescription():
+            self.setAccessibleDescription(sentence)
+        if picture is not None and picture == self.picture:
+            return
+        self.picture = picture
+        self.setVisible(picture is not None)
+        self.updateGeometry()
+        self.update()
+
+    def hasHeightForWidth(self) -> bool:
+        return True
+
+    def heightForWidth(self, width: int) -> int:
+        return self.picture.height(self._look, width) if self.picture else 0
+
+    def sizeHint(self) -> QSize:
+        return QSize(self._look.px(280), self.heightForWidth(max(self.width(), self._look.px(200))))
+
+    def minimumSizeHint(self) -> QSize:
+        return QSize(0, self.heightForWidth(self.width()))
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        if self.picture:
+            painter = QPainter(self)
+            self.picture.draw(painter, self._look, 0, 0, self.width())
+            painter.end()
+
+    def _on_look_changed(self) -> None:
+        self.updateGeometry()
+        self.update()
