@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import itertools
 import math
 
 import msgspec
@@ -122,20 +123,23 @@ def test_the_worse_side_is_that_of_the_outcome(welcome: bool, side: LineSide, wo
     ],
 )
 def test_a_margin_of_counts_has_the_score_p(scale: str, text: str, side: LineSide, value: float) -> None:
-    """The statistic is Miettinen and Nurminen's on the line's own scale, at the margin."""
-    line = line_of(drawn(line_kind="margin", line_scale=scale, line_text=text, line_side=side))
+    """Miettinen and Nurminen's statistic on the line's own scale, against what is worse than the margin."""
+    margin = drawn(line_kind="margin", line_scale=scale, line_text=text, line_side=side)
+    line = line_of(margin)
     assert line.value == pytest.approx(value)
     assert (line.measure, line.method) == (scale, "margin-score")
-    assert line.p == margin_p(scale, COUNTS, line.value, side)  # type: ignore[arg-type]
+    assert line.p == margin_p(scale, COUNTS, line.value, "more")  # type: ignore[arg-type]
+    welcome = line_of(msgspec.structs.replace(margin, left_welcome=True))
+    assert welcome.p == margin_p(scale, COUNTS, line.value, "fewer")  # type: ignore[arg-type]
 
 
 @pytest.mark.parametrize("text", ["1 per 100", "0.5 per 100", "3 per 100", "4%"])
 def test_the_p_of_a_margin_and_its_side_agree(text: str) -> None:
-    """p is below 0.025 exactly where the 95% score interval lies wholly short of the margin."""
-    for side in ("fewer", "more"):
-        line = line_of(drawn(line_kind="margin", line_text=text, line_side=side))
+    """p is below 0.025 exactly where the 95% score interval lies wholly on the better side of the margin."""
+    for side, welcome in itertools.product(("fewer", "more"), (True, False)):
+        line = line_of(drawn(line_kind="margin", line_text=text, line_side=side, left_welcome=welcome))
         assert isinstance(line.p, float)
-        assert (line.p < 0.025) == (line.lies == "short")
+        assert (line.p < 0.025) == (line.lies == ("short" if line.worse_side else "beyond"))
 
 
 @pytest.mark.parametrize("key", ["pooled_risk_ratio", "pair_ratio", "risk_ratio"])

@@ -134,13 +134,13 @@ def test_the_readers_own_line_is_solid_over_the_whole_height(marked: Strip) -> N
 
 
 def test_the_readers_own_line_has_a_flag(marked: Strip) -> None:
-    """The flag tells it from no effect in grey too; it turns round where it would leave the strip."""
-    image = marked(difference_scale([0.1]), -0.05)
-    assert is_ink(image, 73, TOP + 3)
-    assert not is_ink(image, 67, TOP + 3)
-    at_the_end = marked(difference_scale([0.1]), 0.1)
-    assert is_ink(at_the_end, RIGHT - 3, TOP + 3)
-    assert not is_ink(at_the_end, RIGHT + 3, TOP + 3)
+    """The flag tells it from no effect in grey too, and points away from it unless it would leave the strip."""
+    fewer, more = marked(difference_scale([0.1]), -0.05), marked(difference_scale([0.1]), 0.05)
+    assert (is_ink(fewer, 67, TOP + 3), is_ink(fewer, 73, TOP + 3)) == (True, False)
+    assert (is_ink(more, 167, TOP + 3), is_ink(more, 173, TOP + 3)) == (False, True)
+    least, most = marked(difference_scale([0.1]), -0.1), marked(difference_scale([0.1]), 0.1)
+    assert (is_ink(least, LEFT - 3, TOP + 3), is_ink(least, LEFT + 3, TOP + 3)) == (False, True)
+    assert (is_ink(most, RIGHT - 3, TOP + 3), is_ink(most, RIGHT + 3, TOP + 3)) == (True, False)
 
 
 @pytest.mark.parametrize("mark", [None, 500.0, 0.0])

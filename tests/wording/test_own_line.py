@@ -81,7 +81,7 @@ def test_better_and_worse_are_those_of_the_margin(worse_side: bool, lies: str, s
     line = msgspec.structs.replace(a_margin(), worse_side=worse_side, lies=lies)
     said = line_sentence(Outcome(), line)
     assert f"{side} of your margin" in said
-    assert f"at the margin or {'worse' if worse_side else 'better'}" in said
+    assert "against an effect at the margin or worse" in said
 
 
 def test_no_sentence_gives_a_verdict() -> None:
@@ -107,8 +107,8 @@ def test_the_value_is_said_on_its_scale(measure: str, value: float, said: str) -
     """A difference per 100 with its side, a ratio as a ratio; the mark says whose it is."""
     line = a_line(measure=measure, value=value)
     assert value_text(line) == said
-    assert mark_words(line) == f"your line: {said}"
-    assert mark_words(msgspec.structs.replace(line, kind="margin")) == f"your margin: {said}"
+    assert mark_words(line) == f"Flag: your line, {said}."
+    assert mark_words(msgspec.structs.replace(line, kind="margin")) == f"Flag: your margin, {said}."
 
 
 def test_the_measure_and_the_level_are_named() -> None:

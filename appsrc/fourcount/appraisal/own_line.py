@@ -68,7 +68,8 @@ def _against(
         value=value,
         lies=lies,
         worse_side=(outcome.line_side == "fewer") == outcome.welcome,
-        p=_p(key, figure, whole, value, outcome.line_side, level) if margin else None,
+        # Always against what is worse than the margin, so that a small p speaks for the better side of it.
+        p=_p(key, figure, whole, value, "fewer" if outcome.welcome else "more", level) if margin else None,
         method=(PRINTED if whole is None else SCORE) if margin else "",
         level=level,
     )

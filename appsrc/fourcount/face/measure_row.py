@@ -46,11 +46,6 @@ def _role(line: MeasureLine) -> Role:
     return "estimate" if any(mark.isdigit() or mark == INFINITY for mark in line.estimate) else "body"
 
 
-def _own(line: MeasureLine) -> str:
-    """The mark on the strip as a sentence."""
-    return f"{line.mark_words[:1].upper()}{line.mark_words[1:]}." if line.mark_words else ""
-
-
 class ColumnHead(QWidget):
     """Names the column of intervals above the rows, so that no interval stands without its level."""
 
@@ -120,7 +115,7 @@ class MeasureRow(QAbstractButton):
         values = line.withheld or ", ".join(part for part in (line.estimate, line.interval) if part)
         name = line.name.replace("\n", ", ")
         self.setAccessibleName(f"{name}: {values}" if values else name)
-        self.setAccessibleDescription(" ".join(part for part in (line.detail, line.note, _own(line)) if part))
+        self.setAccessibleDescription(" ".join(part for part in (line.detail, line.note) if part))
 
     def hasHeightForWidth(self) -> bool:
         return True

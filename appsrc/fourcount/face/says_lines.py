@@ -56,9 +56,12 @@ def marked(lines: Lines, findings: OutcomeFindings) -> Lines:
     own = findings.line
     if not isinstance(own, OwnLine):
         return lines
-    return tuple(
-        replace(line, mark=own.value, mark_words=mark_words(own)) if line.key == own.measure else line for line in lines
-    )
+    return tuple(_with_flag(line, own) if line.key == own.measure else line for line in lines)
+
+
+def _with_flag(line: MeasureLine, own: OwnLine) -> MeasureLine:
+    note = f"{line.note}." if line.note and not line.note.endswith(".") else line.note
+    return replace(line, mark=own.value, note=" ".join(part for part in (note, mark_words(own)) if part))
 
 
 def scales_of(*parts: Lines) -> tuple[dict[str, Scale], set[str]]:

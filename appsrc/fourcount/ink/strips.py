@@ -43,7 +43,7 @@ def draw_strip(
     if low is not None and high is not None:
         _draw_interval(painter, area, middle, scale.place(low), scale.place(high), palette.accent, unit)
     if mark is not None and 0 <= scale.place(mark) <= 1:
-        _draw_mark(painter, _x(area, scale.place(mark)), area, palette, unit)
+        _draw_mark(painter, scale, mark, area, palette, unit)
     if estimate is not None and 0 <= scale.place(estimate) <= 1:
         painter.setPen(Qt.PenStyle.NoPen)
         painter.setBrush(QColor(palette.page))
@@ -57,13 +57,17 @@ def _x(area: QRectF, place: float) -> float:
     return area.left() + area.width() * place
 
 
-def _draw_mark(painter: QPainter, x: float, area: QRectF, palette: Palette, unit: float) -> None:
-    """A line over the strip's whole height with a flag that points away from it, to the side that has room."""
+def _draw_mark(painter: QPainter, scale: Scale, mark: float, area: QRectF, palette: Palette, unit: float) -> None:
+    """A line over the strip's whole height; its flag points away from no effect, unless it would leave the strip."""
+    x = _x(area, scale.place(mark))
     painter.setPen(QPen(QColor(palette.page), 4 * unit, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))
     painter.drawLine(QLineF(x, area.top(), x, area.bottom()))
     painter.setPen(QPen(QColor(palette.ink), 1.5 * unit, Qt.PenStyle.SolidLine, Qt.PenCapStyle.FlatCap))
     painter.drawLine(QLineF(x, area.top(), x, area.bottom()))
-    size = 6 * unit if x + 6 * unit <= area.right() else -6 * unit
+    size = 6 * unit
+    leftwards = scale.no_effect is not None and mark < scale.no_effect
+    if x - size >= area.left() if leftwards else x + size > area.right():
+        size = -size
     painter.setPen(Qt.PenStyle.NoPen)
     painter.setBrush(QColor(palette.ink))
     top = area.top()

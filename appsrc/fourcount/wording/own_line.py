@@ -20,9 +20,8 @@ MARGIN = {
     "worse": "lies wholly on the worse side of your margin of {value}",
     "across": "lies on both sides of your margin of {value}: it holds effects better and effects worse than the margin",
 }
-P_OF = {True: "at the margin or worse", False: "at the margin or better"}
 BY = {"margin-score": "Miettinen–Nurminen", "margin-printed": "from the interval"}
-MARK = "your {kind}: {value}"
+MARK = "Flag: your {kind}, {value}."
 KINDS = {"matters": "line", "margin": "margin"}
 
 
@@ -55,7 +54,7 @@ def value_text(line: OwnLine) -> str:
 
 
 def mark_words(line: OwnLine) -> str:
-    """What the mark on the strip is, for those who cannot see it."""
+    """What the flag on the strip is, under the figures and for those who cannot see it."""
     return MARK.format(kind=KINDS[line.kind], value=value_text(line))
 
 
@@ -77,4 +76,4 @@ def _p(line: OwnLine) -> str:
     if line.p is None:
         return "."
     by = BY.get(line.method, line.method)
-    return f" (one-sided {numbers.p_phrase(line.p)} against an effect {P_OF[line.worse_side]}; {by})."
+    return f" (one-sided {numbers.p_phrase(line.p)} against an effect at the margin or worse; {by})."

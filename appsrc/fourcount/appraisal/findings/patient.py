@@ -86,8 +86,9 @@ class OwnLine(msgspec.Struct, frozen=True, kw_only=True):
     ratio as it is. ``lies`` is where the interval lies against the line, counted away from no effect on the line's own
     side: "beyond" (wholly past the line), "short" (wholly on the side of no effect) or "across". For a margin, "short"
     means that the margin is not reached, which is non-inferiority where the side is the worse one. ``p`` is
-    one-sided, of the hypothesis that the effect lies at the margin or beyond it (Miettinen and Nurminen's statistic
-    where there are counts), by the method ``method``; only a margin has one. ``level`` is that of the interval.
+    one-sided, of the hypothesis that the effect is the margin's or worse, whichever side of no effect the margin lies
+    on (Miettinen and Nurminen's statistic where there are counts), by the method ``method``; only a margin has one.
+    ``level`` is that of the interval.
     """
 
     kind: Literal["matters", "margin"]

@@ -19,7 +19,7 @@ class MeasureLine:
 
     ``withheld`` is the reason for which the whole measure is not given, else "". While the table is
     not whole, every text of a figure is empty. Rates have their strip's numbers in the unit that is shown. ``mark`` is
-    the reader's own line on the strip, ``mark_words`` what it is.
+    where the reader's own line stands on the strip.
     """
 
     key: str
@@ -35,7 +35,6 @@ class MeasureLine:
     estimate_value: float | None = None
     high: float | None = None
     mark: float | None = None
-    mark_words: str = ""
 
 
 def blank_line(key: str, name: str, group: LineGroup = "main") -> MeasureLine:
