@@ -70,8 +70,8 @@ BASES = [
         of_total(design="cohort", patient=OVERALL),
         carried("risk_ratio", RR, 0.139, start_from="overall"),
         (
-            "Starting risk 13.9% (from an overall risk of 12%, 30% having the exposure), risk ratio 0.54 (0.37 to 0.78) "
-            "kept constant."
+            "Starting risk 13.9% (from an overall risk of 12%, 30% having the exposure), "
+            "risk ratio 0.54 (0.37 to 0.78) kept constant."
         ),
     ),
     (
@@ -85,8 +85,8 @@ BASES = [
         effect_only(risk="20%"),
         carried("hazard_ratio", HR, 0.2, study_span=YEAR, other_span=FIVE_YEARS),
         (
-            "Starting risk 20% over 12 months, hazard ratio 0.72 (0.55 to 0.92) kept constant, carried to 5 years as if "
-            "hazards stayed constant."
+            "Starting risk 20% over 12 months, hazard ratio 0.72 (0.55 to 0.92) kept constant, carried to 5 years "
+            "as if hazards stayed constant."
         ),
     ),
     (

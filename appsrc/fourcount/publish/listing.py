@@ -15,6 +15,7 @@ from fourcount.wording.cautions import SAID_OF_THE_PATIENT, STANDING, caution_te
 from fourcount.wording.extras import extra_lines
 from fourcount.wording.form import lacking, shown_choices
 from fourcount.wording.lines import MeasureLine, measure_lines
+from fourcount.wording.own_line import own_line_sentence
 from fourcount.wording.patient import patient_words
 from fourcount.wording.sentence import headline, p_sentence
 
@@ -38,6 +39,7 @@ def listing(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
             _figures([line for line in lines if not line.withheld], shown_choices(findings, choices)),
             *map(_wrapped, withheld_lines([line for line in lines if line.withheld])),
             _wrapped(p_sentence(findings)),
+            _wrapped(own_line_sentence(outcome, findings)),
             _beside(outcome, findings, choices),
             patient,
             _cautions(findings, said=bool(patient)),

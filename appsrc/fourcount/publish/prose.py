@@ -18,6 +18,7 @@ from fourcount.wording import exports, labels, names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.cautions import SAID_OF_THE_PATIENT, STANDING_FULL, caution_text
 from fourcount.wording.form import lacking, patient_choices, shown_choices
+from fourcount.wording.own_line import own_line_sentence
 from fourcount.wording.patient import picture_heading
 from fourcount.wording.patient_sentence import patient_sentence
 from fourcount.wording.sentence import headline, p_sentence
@@ -35,6 +36,7 @@ def prose(record: Record, outcome: Outcome, findings: OutcomeFindings, *, versio
         one_line(f"{study(outcome)} {_counts(outcome, findings)}"),
         one_line(headline(outcome, findings, choices)),
         _figures(outcome, findings, choices),
+        one_line(own_line_sentence(outcome, findings)),
         one_line(" ".join(paper_says(outcome, findings, choices))),
         one_line(patient),
         _cautions(findings, said=bool(patient)),

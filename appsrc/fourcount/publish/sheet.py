@@ -21,6 +21,7 @@ from fourcount.wording.cautions import STANDING_FULL, caution_text
 from fourcount.wording.form import measure_of, shown_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines.strata import STRATUM_KEY
+from fourcount.wording.own_line import own_line_sentence
 from fourcount.wording.p_value import PRINTED, own_p, test_title, why_no_p
 from fourcount.wording.person_time import unit
 
@@ -38,7 +39,9 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
     choices = record.choices
     shown = shown_choices(findings, choices)
     about = (names.outcome_name(outcome), record.title_text, record.source_text, study(outcome))
+    own_line = own_line_sentence(outcome, findings)
     notes = [
+        *([own_line] if own_line else []),
         *paper_says(outcome, findings, choices),
         exports.UNROUNDED.format(level=numbers.level(shown.level)),
         *([exports.PER_UNIT.format(unit=unit(outcome))] if findings.form == "person-time" else []),

@@ -15,7 +15,7 @@ from fourcount.wording.effects import carried_name, value_and_limits
 from fourcount.wording.form import patient_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.labels import COLUMNS
-from fourcount.wording.numbers import plain
+from fourcount.wording.numbers import plain, quantity
 from fourcount.wording.working.parts import SPACE, Row, Working, about, interval_label, reciprocal
 
 PATIENT = "patient"
@@ -70,7 +70,9 @@ def _from_rate(outcome: Outcome, patient: PatientFindings) -> str:
     if not isinstance(rate, RateReading) or patient.study_span is None:
         return result
     a_year = rate.value * DAYS_IN["year"] / DAYS_IN[rate.unit]
-    return f"1 − exp(−{plain(a_year)} × {plain(patient.study_span.years)}) = {result}, the rate and the time in years"
+    return (
+        f"1 − exp(−{plain(a_year)} × {quantity(patient.study_span.years)}) = {result}, the rate and the time in years"
+    )
 
 
 def _from_overall(outcome: Outcome) -> list[Row]:
@@ -122,7 +124,7 @@ def _over(risk: float, result: float, patient: PatientFindings) -> str:
     from_, to = patient.study_span, patient.other_span
     if from_ is None or to is None:
         return plain(result)
-    years = {"from_": plain(from_.years), "to": plain(to.years)}
+    years = {"from_": quantity(from_.years), "to": quantity(to.years)}
     return ANOTHER_SPAN.format(risk=plain(risk), result=plain(result), **years)
 
 
