@@ -76,3 +76,47 @@ def test_an_effect_of_nothing() -> None:
     assert risk_with("risk_ratio", 0.0, 1.0) == 0.0
     assert risk_with("odds_ratio", 0.7, 1.0) == 1.0
     assert risk_with("odds_ratio", 0.7, 0.0) == 0.0
+
+
+def test_a_hazard_ratio_carried() -> None:
+    """Altman and Andersen 1999, BMJ 319:1492 (from memory): HR 0.72 where 33% survive is one in 8.32 people."""
+    with_ = risk_with("hazard_ratio", 0.72, 0.67)
+    assert isinstance(with_, float)
+    assert 1 / (0.67 - with_) == pytest.approx(8.32, abs=0.005)
+    assert risk_with("rate_ratio", 0.72, 0.67) == with_
+
+
+def test_a_difference_carried() -> None:
+    """A difference kept constant is added; past 0 or 100% is a gap of its own, the last bit apart."""
+    assert risk_with("risk_difference", -0.05, 0.2) == pytest.approx(0.15)
+    assert risk_with("risk_difference", -0.25, 0.2) == Gap("carried-beyond-zero")
+    assert risk_with("risk_difference", 0.85, 0.2) == Gap("beyond-one")
+    assert risk_with("risk_difference", -0.3, 0.1 + 0.2) == pytest.approx(0.0, abs=1e-15)
+    assert risk_with("risk_difference", 0.7, 0.1 + 0.2) == 1.0
+    assert risk_with("risk_difference", -0.2, 0.3 - 0.1) == 0.0
+
+
+def test_hazards_that_meet_nobody_or_everybody() -> None:
+    """As for odds: without end from nobody, and of nothing from everybody, no risk follows."""
+    for effect in ("hazard_ratio", "rate_ratio"):
+        assert risk_with(effect, math.inf, 0.0) == Gap("undetermined-at-baseline")
+        assert risk_with(effect, 0.0, 1.0) == Gap("undetermined-at-baseline")
+        assert risk_with(effect, math.inf, 0.2) == 1.0
+        assert risk_with(effect, 0.0, 0.2) == 0.0
+        assert risk_with(effect, 0.5, 1.0) == 1.0
+
+
+@settings(max_examples=100)
+@given(start=RISKS, ratio=st.floats(0.05, 20))
+def test_small_risks_are_carried_alike(start: float, ratio: float) -> None:
+    """At a rare outcome risk, odds and hazard ratio lead to one risk; elsewhere they part in a fixed order."""
+    found = [risk_with(effect, ratio, start) for effect in ("odds_ratio", "hazard_ratio")]
+    odds, hazard = found
+    assert isinstance(odds, float)
+    assert isinstance(hazard, float)
+    plain = start * ratio
+    if start * max(ratio, 1) < 1e-4:
+        assert odds == pytest.approx(plain, rel=3e-3)
+        assert hazard == pytest.approx(plain, rel=3e-3)
+    # A hazard ratio lies between: its risk ratio is nearer to 1 than the ratio itself, the odds ratio's nearer still.
+    assert odds <= hazard + 1e-12 if ratio > 1 else hazard <= odds + 1e-12
