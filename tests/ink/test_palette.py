@@ -5,6 +5,7 @@ from __future__ import annotations
 import re
 
 import pytest
+from PySide6.QtGui import QColor
 
 from fourcount.ink.palette import DARK, LIGHT, PAPER, Palette, contrast, relative_luminance
 
@@ -61,3 +62,11 @@ def test_contrast_is_that_of_the_guidelines(one: str, other: str, ratio: float) 
     """Black on white is 21:1, a colour on itself 1:1, and #767676 the palest grey that passes (WCAG 2.2)."""
     assert contrast(one, other) == pytest.approx(ratio, abs=0.005)
     assert contrast(other, one) == contrast(one, other)
+
+
+@pytest.mark.parametrize("palette", PALETTES)
+def test_no_colour_of_a_picture_alarms_or_approves(palette: Palette) -> None:
+    """Icons are blue and grey: no red, no amber, no green, which would judge what the numbers leave to the reader."""
+    accent, outline = QColor(palette.accent), QColor(palette.outline)
+    assert 180 <= accent.hslHue() <= 250
+    assert outline.hslSaturation() < 40

@@ -114,7 +114,7 @@ def test_both_frames_make_the_whole(
 def test_a_change_of_denominator_is_said(words_of: Callable[..., PictureWords]) -> None:
     """More people than a hundred are a notice on the picture, one array or two; bars show no people."""
     drawn = Drawn(0.024, 0.026, 1_000)
-    assert words_of(drawn).note == "Each picture shows 1,000 people: fewer could not show these risks truly."
+    assert words_of(drawn).note == "Each picture shows 1,000 people, not 100."
     assert words_of(drawn, Asked("one")).note.startswith("The picture shows 1,000 people")
     assert "people" not in words_of(drawn, Asked("bars")).note
 
@@ -124,6 +124,7 @@ def test_too_small_to_draw_is_said(words_of: Callable[..., PictureWords]) -> Non
     words = words_of(Drawn(0.00001, 0.00002, None), bar_top=0.001)
     assert words.note == "Too small to draw as people. The bars run to 0.1%, not to 100%."
     assert words.without.number == "1 in 100,000"
+    assert words_of(Drawn(0.5, 0.50001, None), bar_top=1.0).note == "A difference too small to draw as people."
 
 
 def test_bars_name_their_ends(words_of: Callable[..., PictureWords]) -> None:

@@ -39,14 +39,10 @@ class Picture:
     ``within`` is a height that the picture is to keep to where it can: its icons are made smaller.
     """
 
-    def __init__(
-        self, plan: Plan, words: PictureWords, options: PictureOptions | bool = USUAL, bars: bool = False
-    ) -> None:
-        asked = USUAL if isinstance(options, bool) else options
-        as_bars = bars or options is True or plan.denominator is None
+    def __init__(self, plan: Plan, words: PictureWords, options: PictureOptions = USUAL) -> None:
         self.plan = plan
         self.words = words
-        self.options = asked._replace(arrangement="bars") if as_bars else asked
+        self.options = options if plan.denominator else options._replace(arrangement="bars")
         self.bars = self.options.arrangement == "bars"
 
     def __eq__(self, other: object) -> bool:
@@ -149,7 +145,7 @@ class Picture:
     ) -> float:
         top, px = y, sheet.style.px
         if self.options.captions:
-            sheet.text(x, y, width, side.title, "strong")
+            sheet.text(x, y + heads[0] - sheet.title_height(side, width), width, side.title, "strong")
             y += heads[0] + px(4)
             sheet.count(x, y, width, side)
             y += heads[1] + px(8)
@@ -206,7 +202,7 @@ class Picture:
     def _caption(self, sheet: Sheet, x: float, y: float, width: float, side: Side, heads: tuple[float, float]) -> float:
         """Title, count and the other frame, one under the other."""
         top, px = y, sheet.style.px
-        sheet.text(x, y, width, side.title, "strong")
+        sheet.text(x, y + heads[0] - sheet.title_height(side, width), width, side.title, "strong")
         y += heads[0] + px(4)
         sheet.count(x, y, width, side)
         y += heads[1] + px(2)

@@ -21,7 +21,9 @@ from fourcount.wording.subject import subject
 KeyState = Literal["affected", "added", "uncertain", "avoided", "others"]
 
 TOO_SMALL = "Too small to draw as people."
-MORE_PEOPLE = "{picture} shows {people} people: fewer could not show these risks truly."
+TOO_CLOSE = "A difference too small to draw as people."
+ONE_IN_THE_LARGEST = 0.00005  # half an icon of ten thousand
+MORE_PEOPLE = "{picture} shows {people} people, not 100."
 EACH = {"two": "Each picture", "one": "The picture"}
 BAR_END = "The bars run to {end}, not to 100%."
 EITHER_WAY = "{words} either way"
@@ -182,7 +184,8 @@ def _notes(outcome: Outcome, drawn: Drawn, asked: Asked, said: Said, level: str,
     welcome = WELCOME_DRAWN if outcome.welcome and not said.turned and drawn.denominator else ""
     scale = ""
     if drawn.denominator is None:
-        scale = TOO_SMALL
+        least = min(side for risk in (drawn.without_risk, drawn.with_risk) for side in (risk, 1 - risk))
+        scale = TOO_CLOSE if least >= ONE_IN_THE_LARGEST else TOO_SMALL
     elif drawn.denominator != 100 and asked.arrangement in EACH:
         scale = MORE_PEOPLE.format(picture=EACH[asked.arrangement], people=numbers.whole(drawn.denominator))
     bars = drawn.denominator is None or asked.arrangement not in EACH
