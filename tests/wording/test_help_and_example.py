@@ -43,7 +43,8 @@ SHOWN = (*ALL_METHODS, *TESTS, *PAIR_TESTS, *RATE_TESTS, *STRATA_TESTS, *HOMOGEN
 LIGHT = ("cautions", "facts", "gaps", "names", "numbers")
 OTHERS = (
     "basis", "carried", "example", "extras", "form", "headlines", "p_value", "pairs", "person_time", "printed",
-    "headline", "help", "limits", "lines", "meanings", "patient", "patient_sentence",
+    "headline", "help", "limits", "lines", "meanings", "patient", "patient_sentence", "patient_table",
+    "picture_sentence", "ranks", "spans", "starts", "subject", "effects",
     "sentence", "working",
 )  # fmt: skip
 
@@ -84,7 +85,10 @@ def test_every_form_of_entry_is_explained_by_its_specimen(specimen):
     assert terms()[: len(entering())] == entering()
 
 
-@pytest.mark.parametrize("name", ["paste", "what the paper prints"])
+@pytest.mark.parametrize(
+    "name",
+    ["paste", "what the paper prints", "the patient’s starting risk", "a time span for the patient", "your own line"],
+)
 def test_the_paste_and_the_check_are_explained(name):
     """With what they take."""
     assert dict(entering())[name].endswith(".")
@@ -97,7 +101,8 @@ def test_the_paste_and_the_check_are_explained(name):
         "risk ratio", "odds ratio", "as a risk ratio at 12%", "interval", "level", "score", "textbook", "exact",
         "starting risk", "on balance", "avoided", "added", "pairs that differ", "rate", "hazard ratio",
         "risk at a time", "strata", "pooled", "crude", "adjusted", "add up", "lost", "fragility", "E-value",
-        "attributable", "design effect",
+        "attributable", "design effect", "kept constant", "low, usual, high", "overall risk", "another time span",
+        "what the interval holds", "margin", "smallest difference that matters",
     ],
 )  # fmt: skip
 def test_every_word_of_the_window_is_explained(term):

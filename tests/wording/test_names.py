@@ -107,3 +107,24 @@ def test_the_other_outcome_follows_what_is_counted(outcome_of):
     outcome = outcome_of(counted="right")
     assert names.event_words(outcome) == "did not fall"
     assert names.other_words(outcome) == "fell at least once"
+
+
+@pytest.mark.parametrize(
+    ("effect", "name"),
+    [
+        ("risk_ratio", "prevalence ratio"),
+        ("risk_difference", "prevalence difference"),
+        ("odds_ratio", "odds ratio"),
+        ("hazard_ratio", "hazard ratio"),
+        ("rate_ratio", "rate ratio"),
+    ],
+)
+def test_an_effect_is_called_what_its_design_allows(outcome_of, effect, name):
+    """A survey has prevalences; odds, hazards and rates are called the same everywhere."""
+    assert names.effect_name(outcome_of(design="survey"), effect) == name
+
+
+def test_people_who_did_something_are_no_group_to_be_with(outcome_of):
+    """A label that begins with them stands behind "people" as it is."""
+    outcome = outcome_of(design="cohort", first_label_text="People who smoked")
+    assert names.in_group(outcome, "index") == "who smoked"

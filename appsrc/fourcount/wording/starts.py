@@ -3,8 +3,9 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import Gap, PatientFindings
-from fourcount.record.entry.readings import RiskReading
-from fourcount.record.entry.starting import read_starting_risk
+from fourcount.record.entry.readings import Blank, Proportion, RiskReading, Unreadable
+from fourcount.record.entry.risk import read_risk
+from fourcount.record.entry.starting import read_share, read_starting_risk
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers, of_people, spans
@@ -64,9 +65,15 @@ def _worked_out(outcome: Outcome, patient: PatientFindings) -> str:
         over = f" over {spans.duration(patient.study_span)}" if patient.study_span and not patient.other_span else ""
         return FROM_RATE.format(rate=names.bare(typed.rate_text), over=over)
     if patient.start_from == "overall":
-        overall, share = names.bare(typed.overall_risk_text), names.bare(typed.exposed_share_text)
+        overall = _as_risk(read_risk(typed.overall_risk_text), typed.overall_risk_text)
+        share = _as_risk(read_share(typed.exposed_share_text), typed.exposed_share_text)
         return FROM_OVERALL.format(overall=overall, share=share)
     return ""
+
+
+def _as_risk(reading: Proportion | Blank | Unreadable, text: str) -> str:
+    """``30%`` for whatever way it was typed in."""
+    return numbers.percent_given(reading.value) if isinstance(reading, Proportion) else names.bare(text)
 
 
 def _reading(outcome: Outcome, patient: PatientFindings) -> RiskReading | None:

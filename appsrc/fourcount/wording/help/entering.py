@@ -68,7 +68,7 @@ ENTERING = (
         ),
     ),
     (
-        "another time span",
+        "a time span for the patient",
         "A span such as 5 years or 30 days. The study’s own time span has to be typed as one too.",
     ),
     (

@@ -4,8 +4,9 @@ from __future__ import annotations
 
 from fourcount.appraisal.findings import AnyNumberNeeded, CarriedEffect, Figure, Gap, OutcomeFindings, PatientFindings
 from fourcount.record.entry.person_rate import read_rate
-from fourcount.record.entry.readings import DAYS_IN, Proportion, RateReading, RiskReading
-from fourcount.record.entry.starting import read_share, read_starting_risk
+from fourcount.record.entry.readings import DAYS_IN, Proportion, RateReading
+from fourcount.record.entry.risk import read_risk
+from fourcount.record.entry.starting import read_share
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.entries.carrying import CARRYING
@@ -76,11 +77,8 @@ def _from_rate(outcome: Outcome, patient: PatientFindings) -> str:
 
 
 def _from_overall(outcome: Outcome) -> list[Row]:
-    overall, share = (
-        read_starting_risk(outcome.patient.overall_risk_text),
-        read_share(outcome.patient.exposed_share_text),
-    )
-    if not isinstance(overall, RiskReading) or not isinstance(share, Proportion):
+    overall, share = read_risk(outcome.patient.overall_risk_text), read_share(outcome.patient.exposed_share_text)
+    if not isinstance(overall, Proportion) or not isinstance(share, Proportion):
         return []
     return [("Solved from", f"P = {plain(overall.value)}, s = {plain(share.value)}")]
 
