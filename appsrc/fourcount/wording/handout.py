@@ -9,6 +9,7 @@ from typing import NamedTuple
 from fourcount.appraisal.findings import PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
+from fourcount.wording import handout_labels as labels
 from fourcount.wording import names, numbers
 from fourcount.wording.basis import basis
 from fourcount.wording.plain_texts import EACH_FIGURE, EACH_FIGURE_OR_MARK, EACH_MARK, ONE_STUDY
@@ -29,21 +30,6 @@ NOTHING_READY = "No outcome has all that a page needs yet. {why}"
 TOO_MANY = "{fit} of these {count} outcomes fit on one page: untick {rest}."
 TOO_LONG = "These names are too long for one page: shorten those of the groups and of the outcome."
 
-WINDOW_TITLE = "Handout"
-PAPERS = {"a4": "A4", "letter": "Letter"}
-PAPER_NAME = "Paper"
-OUTCOMES_NAME = "On the page"
-PREVIEW_NAME = "The page as it will be printed"
-NOT_READY = "{name} (not yet: {why})"
-UNNAMED = "Outcome {number}"
-SAVE, PRINT, CLOSE = "Save as…", "Print…", "Close"
-SAVE_TITLE = "Save the page"
-SAVED = "The page is saved: {path}"
-PRINTED = "The page went to the printer."
-NOT_PRINTED = "The page could not be printed: {reason}."
-NOT_SAVED = "The page could not be saved in {folder}: {reason}. Nothing else was changed."
-UNKNOWN_SUFFIX = "The page can be saved as .pdf, .png or .svg; {name} ends in none of these."
-FILTERS = {"pdf": "PDF (*.pdf)", "png": "Picture (*.png)", "svg": "Drawing (*.svg)"}
 USUAL_NAME = "handout"
 LONGEST_NAME = 80
 
@@ -118,7 +104,9 @@ def _basis(pages: Sequence[tuple[Outcome, PatientFindings]], choices: Choices) -
     said = [basis(outcome, patient, choices) for outcome, patient in pages]
     if len(set(said)) == 1:
         return said[0]
-    titles = [names.bare(outcome.name_text) or UNNAMED.format(number=i + 1) for i, (outcome, _) in enumerate(pages)]
+    titles = [
+        names.bare(outcome.name_text) or labels.UNNAMED.format(number=i + 1) for i, (outcome, _) in enumerate(pages)
+    ]
     return " ".join(WORKED_OUT.format(name=name, basis=text) for name, text in zip(titles, said, strict=True))
 
 

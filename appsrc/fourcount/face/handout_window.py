@@ -1,0 +1,285 @@
+"""The handout: its outcomes to tick, its paper, the page as it will be, and the ways out to a file or a printer."""
+
+from __future__ import annotations
+
+from pathlib import Path
+from typing import TYPE_CHECKING
+
+from PySide6.QtCore import QSize, Qt, QTimer
+from PySide6.QtGui import QAction, QImage, QKeySequence, QPainter, QPaintEvent, QPen, QResizeEvent
+from PySide6.QtWidgets import QCheckBox, QDialog, QHBoxLayout, QScrollArea, QVBoxLayout, QWidget
+
+from fourcount.face import handout_dialogs
+from fourcount.face.buttons import Button
+from fourcount.face.fields import ChoiceField
+from fourcount.face.flow import FlowLayout
+from fourcount.face.handout_pages import Candidate, candidates, page_of
+from fourcount.face.handout_print import print_page
+from fourcount.face.page_file import write_page
+from fourcount.face.scroll_bar import ScrollBar
+from fourcount.face.text import Words
+from fourcount.ink.handout import Handout, NoPage
+from fourcount.ink.handout_file import page_image
+from fourcount.record import editing
+from fourcount.wording import handout as words
+from fourcount.wording import handout_labels as labels
+
+if TYPE_CHECKING:
+    from fourcount.face.look import Look
+    from fourcount.face.window import MainWindow
+
+PREVIEW_DOTS = 200
+"""The preview is drawn this fine and made smaller, so that it shows what paper will show."""
+
+PAUSE = 250
+"""Milliseconds after the last change of the record before the page is made anew."""
+
+PANEL = 300
+LONGEST_NAME = 60
+
+
+def open_handout(window: MainWindow) -> HandoutWindow | None:
+    """Show the page; a sentence in the window, and None, where no outcome has all that a page needs."""
+    window.session.settle()
+    found = candidates(window.session.record)
+    if all(one.why for one in found):
+        window.banner.tell(words.why_no_page([found[window.session.view].why]))
+        return None
+    window.banner.hide()
+    handout = window.findChild(HandoutWindow) or HandoutWindow(window)
+    handout.show()
+    handout.raise_()
+    handout.activateWindow()
+    return handout
+
+
+class Preview(QWidget):
+    """The page as one object: a picture of it, and all that it says as its description."""
+
+    def __init__(self, look: Look) -> None:
+        super().__init__()
+        self._look = look
+        self._fine = QImage()
+        self._shown = QImage()
+        self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
+        self.setAccessibleName(labels.PREVIEW_NAME)
+
+    def show_page(self, page: Handout | NoPage) -> None:
+        """Show a page, or nothing where there is none."""
+        drawn = isinstance(page, Handout)
+        self._fine = page_image(page, PREVIEW_DOTS) if isinstance(page, Handout) else QImage()
+        self.setAccessibleDescription(page.words.description if isinstance(page, Handout) else page.sentence)
+        self.setVisible(drawn)
+        self._shown = QImage()
+        self.fit(self.width())
+
+    def fit(self, width: int) -> None:
+        """Be as wide as there is room, and as high as the page is then."""
+        if not self._fine.isNull():
+            self.setFixedSize(width, round(width * self._fine.height() / self._fine.width()))
+        self.update()
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        if self._fine.isNull():
+            return
+        ratio = self.devicePixelRatioF()
+        wanted = self.size() * ratio
+        if self._shown.size() != wanted:
+            smooth = Qt.TransformationMode.SmoothTransformation
+            self._shown = self._fine.scaled(wanted, Qt.AspectRatioMode.IgnoreAspectRatio, smooth)
+            self._shown.setDevicePixelRatio(ratio)
+        painter = QPainter(self)
+        painter.drawImage(0, 0, self._shown)
+        focused = self.hasFocus()
+        painter.setPen(QPen(self._look.colour("accent" if focused else "hairline"), 2 if focused else 1))
+        painter.drawRect(self.rect().adjusted(0, 0, -1, -1))
+        painter.end()
+
+
+class Tick(QCheckBox):
+    """One outcome of the record; one that is not ready cannot be ticked, and says why."""
+
+    def __init__(self, place: int) -> None:
+        super().__init__()
+        self.place = place
+
+    def show_candidate(self, one: Candidate, look: Look) -> None:
+        """Show its name and whether it is on the page."""
+        name = one.name if len(one.name) <= LONGEST_NAME else f"{one.name[:LONGEST_NAME]}…"
+        self.setText(name.replace("&", "&&"))
+        self.setAccessibleName(one.name)
+        self.setAccessibleDescription(one.why)
+        self.setEnabled(not one.why)
+        self.setChecked(one.outcome.on_handout and not one.why)
+        self.setFont(look.font("body"))
+        self.setMinimumHeight(look.px(26))
+
+
+class HandoutWindow(QDialog):
+    """Follows the record while it is open; ticking an outcome is a step that can be undone like any other."""
+
+    def __init__(self, window: MainWindow) -> None:
+        super().__init__(window)
+        self._session = window.session
+        self._look = window.look
+        self._page: Handout | NoPage = NoPage("")
+        self._ticks: list[Tick] = []
+        self.setWindowTitle(labels.WINDOW_TITLE)
+        self.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose)
+        self.preview = Preview(self._look)
+        self.heading = Words(self._look, "strong", text=labels.OUTCOMES_NAME)
+        self.notes = Words(self._look, "small", "muted")
+        self.paper = ChoiceField(self._look, labels.PAPER_NAME, tuple(labels.PAPERS.items()), labels.PAPER_PREFIX)
+        self.notice = Words(self._look, selectable=True)
+        self.save_action = self._action(labels.SAVE, QKeySequence.StandardKey.Save)
+        self.print_action = self._action(labels.PRINT, QKeySequence.StandardKey.Print)
+        self.close_action = self._action(labels.CLOSE, QKeySequence.StandardKey.Close)
+        self._build()
+        self._pause = QTimer(self)
+        self._pause.setSingleShot(True)
+        self._pause.setInterval(PAUSE)
+        self._pause.timeout.connect(self._show_page)
+        self.save_action.triggered.connect(self._on_save)
+        self.print_action.triggered.connect(self._on_print)
+        self.close_action.triggered.connect(self.close)
+        self.paper.chosen.connect(self._show_page)
+        self._session.changed.connect(self._on_changed)
+        self._look.changed.connect(self._on_look_changed)
+        self._show_page()
+        self.resize(self._look.px(PANEL) + 640, 780)
+
+    def _action(self, words_: str, keys: QKeySequence.StandardKey) -> QAction:
+        action = QAction(words_, self)
+        action.setShortcut(QKeySequence(keys))
+        self.addAction(action)
+        return action
+
+    def _build(self) -> None:
+        self._scroll = QScrollArea()
+        self._scroll.setWidget(self.preview)
+        self._scroll.setFrameShape(QScrollArea.Shape.NoFrame)
+        self._scroll.setFocusPolicy(Qt.FocusPolicy.NoFocus)
+        self._scroll.setVerticalScrollBar(ScrollBar(self._look))
+        self._scroll.setVerticalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOn)
+        self._scroll.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
+        self._panel = QWidget()
+        self._column = QVBoxLayout(self._panel)
+        self._column.addWidget(self.heading)
+        self._list = QVBoxLayout()
+        self._column.addLayout(self._list)
+        self._column.addWidget(self.notes)
+        self._column.addWidget(self.paper)
+        self._column.addWidget(self.notice)
+        buttons = FlowLayout(self._look, gap=8)
+        self.save = Button(self._look, labels.SAVE, self.save_action, filled=True)
+        self.print = Button(self._look, labels.PRINT, self.print_action)
+        self.close_button = Button(self._look, labels.CLOSE, self.close_action)
+        for button in (self.save, self.print, self.close_button):
+            buttons.addWidget(button)
+        self._column.addLayout(buttons)
+        self._column.addStretch(1)
+        side = QScrollArea()
+        side.setWidget(self._panel)
+        side.setWidgetResizable(True)
+        side.setFrameShape(QScrollArea.Shape.NoFrame)
+        side.setFocusPolicy(Qt.FocusPolicy.NoFocus)
+        side.setVerticalScrollBar(ScrollBar(self._look))
+        side.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
+        self._side = side
+        row = QHBoxLayout(self)
+        row.setContentsMargins(0, 0, 0, 0)
+        row.addWidget(self._scroll, 1)
+        row.addWidget(side)
+        self._on_look_changed()
+
+    # What is shown
+
+    @property
+    def page(self) -> Handout | NoPage:
+        """The page as the preview shows it, or why there is none."""
+        return self._page
+
+    def _show_page(self) -> None:
+        """Make the page anew from the record as it stands."""
+        self._pause.stop()
+        record = self._session.record
+        found = candidates(record)
+        self._show_ticks(found)
+        self._page = page_of(record, found, str(self.paper.currentData()))
+        self.preview.show_page(self._page)
+        self._fit()
+        self.notice.show_words(self._page.sentence if isinstance(self._page, NoPage) else "")
+        for action, button in ((self.save_action, self.save), (self.print_action, self.print)):
+            action.setEnabled(isinstance(self._page, Handout))
+            button.setEnabled(isinstance(self._page, Handout))
+
+    def _show_ticks(self, found: tuple[Candidate, ...]) -> None:
+        while len(self._ticks) > len(found):
+            tick = self._ticks.pop()
+            self._list.removeWidget(tick)
+            tick.deleteLater()
+        while len(self._ticks) < len(found):
+            tick = Tick(len(self._ticks))
+            tick.clicked.connect(self._on_ticked)
+            self._list.addWidget(tick)
+            self._ticks.append(tick)
+        for tick, one in zip(self._ticks, found, strict=True):
+            tick.show_candidate(one, self._look)
+        said = [labels.NOT_READY.format(name=one.name[:LONGEST_NAME], why=one.why) for one in found if one.why]
+        self.notes.show_words("\n".join(said))
+
+    # Slots
+
+    def _on_ticked(self, checked: bool) -> None:
+        tick = self.sender()
+        if isinstance(tick, Tick):
+            record = self._session.record
+            outcome = editing.with_on_handout(record.outcomes[tick.place], checked)
+            self._session.change_record(editing.with_outcome(record, tick.place, outcome), self._session.view)
+            self._show_page()
+
+    def _on_changed(self) -> None:
+        self._pause.start()
+
+    def _on_save(self) -> None:
+        if self._pause.isActive():
+            self._show_page()
+        if not isinstance(self._page, Handout):
+            return
+        path = handout_dialogs.ask_path(self, words.file_name(self._session.record))
+        if path:
+            sentence = write_page(self._page, path)
+            self.notice.show_words(sentence or labels.SAVED.format(name=Path(path).name))
+
+    def _on_print(self) -> None:
+        if self._pause.isActive():
+            self._show_page()
+        if not isinstance(self._page, Handout):
+            return
+        taken = print_page(self, self._page)
+        if taken is not None:
+            self.notice.show_words(labels.PRINTED if taken else labels.NOT_PRINTED)
+
+    # Qt's own
+
+    def sizeHint(self) -> QSize:
+        return QSize(self._look.px(PANEL) + 640, 780)
+
+    def resizeEvent(self, event: QResizeEvent) -> None:
+        super().resizeEvent(event)
+        self._fit()
+
+    def _fit(self) -> None:
+        bar = self._scroll.verticalScrollBar().sizeHint().width()
+        self.preview.fit(max(self._scroll.width() - bar, 160))
+
+    def _on_look_changed(self) -> None:
+        px = self._look.px
+        self._side.setFixedWidth(px(PANEL))
+        self._column.setContentsMargins(px(20), px(20), px(20), px(20))
+        self._column.setSpacing(px(12))
+        self._list.setSpacing(px(4))
+        for tick in self._ticks:
+            tick.setFont(self._look.font("body"))
+            tick.setMinimumHeight(px(26))
+        self.setPalette(self._look.qt_palette())
