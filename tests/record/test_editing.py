@@ -59,6 +59,12 @@ ACTIONS: dict[str, tuple[Any, set[str]]] = {
     "varied": (lambda outcome: editing.with_follow_up_varied(outcome, varied=True), {"follow_up_varied"}),
     "where": (lambda outcome: editing.with_where(outcome, "abstract"), {"where"}),
     "paper": (lambda outcome: editing.with_paper_measure(outcome, "hazard_ratio"), {"paper_measure"}),
+    "start": (lambda outcome: editing.with_start_kind(outcome, "three"), {"patient"}),
+    "line": (lambda outcome: editing.with_line_kind(outcome, "margin"), {"line_kind"}),
+    "scale": (lambda outcome: editing.with_line_scale(outcome, "odds_ratio"), {"line_scale"}),
+    "side": (lambda outcome: editing.with_line_side(outcome, "more"), {"line_side"}),
+    "certainty": (lambda outcome: editing.with_certainty(outcome, "very-low"), {"certainty"}),
+    "page": (lambda outcome: editing.with_on_handout(outcome, shown=False), {"on_handout"}),
     "adjusted": (lambda outcome: editing.with_adjusted_measure(outcome, "hazard_ratio"), {"adjusted_measure"}),
 }
 
