@@ -1,0 +1,266 @@
+"""The words of the curve: its axes, the names at the ends of its lines, what it says in sentences."""
+
+from __future__ import annotations
+
+from typing import NamedTuple
+
+from fourcount.appraisal.findings import Carriable, Gap, OutcomeFindings, PrintedFigure
+from fourcount.appraisal.findings.curve import Curve, CurveLine, CurveMark, CurvePoint
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import USUAL_LEVEL, Choices, Record
+from fourcount.wording import limits, names, numbers
+from fourcount.wording.effects import carriable_name
+from fourcount.wording.form import shown_choices
+from fourcount.wording.lines.as_printed import carried_texts
+from fourcount.wording.subject import subject
+
+NO_EFFECT = "no difference"
+ODDS_ITSELF = "the {name} itself"
+STUDY = "the study"
+PATIENT = "this patient"
+BOTH = "the study and this patient"
+RANKS = {"low": "low", "usual": "usual", "high": "high"}
+FROM_HERE = ", past 100% from {start}"
+UP_TO_HERE = ", below 0% up to {start}"
+RATIO_AXIS = "{ratio} (odds ratio kept constant)"
+RISKS_VIEW = "Risk with: {name} and its interval"
+RATIOS_VIEW = "{name} as a {ratio}"
+
+KEEPS = "Each line keeps one effect the same at every starting {risk}. That is an assumption: no study shows it."
+BAND = "The band is the {level} of the {name} at each starting {risk}, which is taken as certain there."
+NO_BAND = "The {name} has no interval here, so it has no band."
+OPEN_BAND = "Where one limit would pass 100%, or fall below 0%, only the other one is drawn."
+BAR = "The bar on a point is the interval that the patient is told."
+OTHER_SPAN = "Drawn for the study’s own time span: the patient’s figures for another one stand in the window."
+RATIO_TEXT = (
+    "The same {name} is a {ratio} near the {name} itself where the event is rare, and one near 1 where nearly "
+    "everybody has it."
+)
+LEFT_OUT = "Not drawn: the {name}, which gives no line."
+NOTHING = "No effect of this table can be carried to another starting risk, so there is nothing to draw."
+AT_START = "At a starting {risk} of {start}"
+STUDY_OWN = ", the study’s own"
+KEPT = "{value} with the {name} kept constant"
+CONVERTED = "the {name} is a {ratio} of {value}"
+PASSES = "with the {name} the {risk} would pass 100%"
+FALLS = "with the {name} the {risk} would fall below 0%"
+UNDETERMINED = "not given"
+
+
+class View(NamedTuple):
+    """What is drawn: risks with or, with ``ratios``, odds ratios as risk ratios; and whose interval is the band."""
+
+    ratios: bool = False
+    place: int = 0
+
+
+class CurveWords(NamedTuple):
+    """Every text of one drawing; ``names`` are those of its lines, ``marks`` those of its points, in their orders.
+
+    ``reference`` names the line of no difference, ``itself`` that of an odds ratio taken for a risk ratio.
+    ``sentence`` says what the drawing shows at the points, ``notes`` what it rests on.
+    """
+
+    heading: str
+    title: str
+    across: str
+    up: str
+    reference: str
+    itself: str
+    names: tuple[str, ...]
+    marks: tuple[str, ...]
+    sentence: str
+    notes: tuple[str, ...]
+
+
+class CurveRow(NamedTuple):
+    """One starting risk of the table of the same numbers, and a text for each line."""
+
+    start: str
+    cells: tuple[str, ...]
+
+
+def views(outcome: Outcome, curve: Curve) -> list[tuple[View, str]]:
+    """What can be drawn, the effect that is carried first."""
+    order = sorted(range(len(curve.lines)), key=lambda place: place != curve.carried)
+    risk = names.sentence_case(names.risk_name(outcome))
+    found = [
+        (View(False, place), RISKS_VIEW.format(name=carriable_name(outcome, curve.lines[place].effect)))
+        for place in order
+    ]
+    found = [(view, text if risk == "Risk" else text.replace("Risk", risk, 1)) for view, text in found]
+    ratio = names.effect_name(outcome, "risk_ratio")
+    for place, line in enumerate(curve.ratios):
+        name = names.sentence_case(carriable_name(outcome, line.effect))
+        found.append((View(True, place), RATIOS_VIEW.format(name=name, ratio=ratio)))
+    return found
+
+
+def shown_lines(curve: Curve, view: View) -> tuple[CurveLine, ...]:
+    """The lines that a view draws."""
+    return (curve.ratios[view.place],) if view.ratios else curve.lines
+
+
+def curve_words(
+    record: Record, outcome: Outcome, findings: OutcomeFindings, choices: Choices, curve: Curve, view: View
+) -> CurveWords:
+    """All texts of one view."""
+    lines, spoken = shown_lines(curve, view), subject(outcome)
+    risk, span = names.risk_name(outcome), names.over_span(outcome)
+    with_span = f", {span}" if span else ""
+    across = f"Starting {risk}, {names.in_group(spoken, 'reference')}{with_span}"
+    up = f"{names.sentence_case(risk)} {names.in_group(spoken, 'index')}{with_span}"
+    ratio = names.sentence_case(names.effect_name(outcome, "risk_ratio"))
+    heads = (names.outcome_name(outcome), record.title_text.strip(), record.source_text.strip())
+    return CurveWords(
+        heading=" · ".join(names.bare(head) for head in heads if head),
+        title=f"Across starting {risk}s: {names.event_words(spoken)}",
+        across=across,
+        up=RATIO_AXIS.format(ratio=ratio) if view.ratios else up,
+        reference=NO_EFFECT,
+        itself=ODDS_ITSELF.format(name=carriable_name(outcome, lines[0].effect)) if view.ratios else "",
+        names=tuple(_line_name(outcome, findings, choices, line, view, curve) for line in lines),
+        marks=tuple(_mark_name(mark) for mark in curve.marks),
+        sentence=" ".join(_at(outcome, curve, view, mark) for mark in curve.marks),
+        notes=_notes(outcome, findings, choices, curve, view),
+    )
+
+
+def curve_head(outcome: Outcome, curve: Curve, view: View) -> CurveRow:
+    """The heads of the table of the same numbers."""
+    cells = [names.sentence_case(name_and_value(outcome, line.effect)) for line in shown_lines(curve, view)]
+    if view.ratios:
+        cells = [f"{cell} as a {names.effect_name(outcome, 'risk_ratio')}" for cell in cells]
+    return CurveRow(f"Starting {names.risk_name(outcome)}", tuple(cells))
+
+
+def curve_rows(curve: Curve, view: View, starts: tuple[float, ...]) -> list[CurveRow]:
+    """The figures at round starting risks and at the points that are marked, each with its interval."""
+    lines = shown_lines(curve, view)
+    marked = {mark.without: mark for mark in curve.marks}
+    rows = []
+    for start in sorted({_nearest(lines[0], start) for start in starts} | marked.keys()) if lines else ():
+        found = [_point(line, start) for line in lines]
+        label = _start(marked[start]) if start in marked else numbers.percent_given(start)
+        name = f" ({_mark_word(marked[start])})" if start in marked else ""
+        rows.append(CurveRow(f"{label}{name}", tuple(_cell(point, view.ratios) for point in found)))
+    return rows
+
+
+def name_and_value(outcome: Outcome, one: Carriable) -> str:
+    """``risk ratio 0.54``."""
+    value, _ = carried_texts(one.effect, outcome, one.figure, adjusted=one.adjusted)
+    per = " per 100" if one.effect == "risk_difference" else ""
+    return f"{carriable_name(outcome, one)} {value}{per}"
+
+
+def _line_name(
+    outcome: Outcome, findings: OutcomeFindings, choices: Choices, line: CurveLine, view: View, curve: Curve
+) -> str:
+    """The name at a line's end; that of the band's line has the interval too, and says where the line ends."""
+    text = name_and_value(outcome, line.effect)
+    chosen = view.ratios or line is curve.lines[view.place]
+    one = line.effect
+    if chosen and not isinstance(one.figure.interval, Gap):
+        level = limits.interval_name(_level(findings, choices, one))
+        interval = carried_texts(one.effect, outcome, one.figure, adjusted=one.adjusted)[1]
+        text += f" ({level} {interval})"
+    if line.last < curve.reach:
+        text += FROM_HERE.format(start=numbers.percent(line.last))
+    if line.first > 0:
+        text += UP_TO_HERE.format(start=numbers.percent(line.first))
+    return text
+
+
+def _mark_word(mark: CurveMark) -> str:
+    if mark.of_study:
+        return BOTH if mark.of_patient else STUDY
+    rank = RANKS.get(mark.rank, "")
+    return f"{PATIENT}, {rank}" if rank else PATIENT
+
+
+def _mark_name(mark: CurveMark) -> str:
+    """``this patient, 12%``."""
+    return f"{_mark_word(mark)}, {_start(mark)}"
+
+
+def _start(mark: CurveMark) -> str:
+    return numbers.percent(mark.without) if mark.of_study else numbers.percent_given(mark.without)
+
+
+def _at(outcome: Outcome, curve: Curve, view: View, mark: CurveMark) -> str:
+    """``At a starting risk of 12%: 6.5% with the risk ratio kept constant, 6.3% with the odds ratio kept constant.``"""
+    risk, own = names.risk_name(outcome), STUDY_OWN if mark.of_study else ""
+    parts = []
+    for line in shown_lines(curve, view):
+        name, value = carriable_name(outcome, line.effect), _point(line, mark.without).value
+        if isinstance(value, Gap):
+            pattern = {"beyond-one": PASSES, "carried-beyond-zero": FALLS}.get(value.key)
+            parts.append(pattern.format(name=name, risk=risk) if pattern else f"{name}: {UNDETERMINED}")
+        elif view.ratios:
+            ratio = names.effect_name(outcome, "risk_ratio")
+            parts.append(CONVERTED.format(name=name, ratio=ratio, value=numbers.ratio(value)))
+        else:
+            parts.append(KEPT.format(value=numbers.percent(value), name=name))
+    return f"{AT_START.format(risk=risk, start=_start(mark))}{own}: {', '.join(parts)}."
+
+
+def _notes(outcome: Outcome, findings: OutcomeFindings, choices: Choices, curve: Curve, view: View) -> tuple[str, ...]:
+    lines = shown_lines(curve, view)
+    if not lines:
+        return (NOTHING,)
+    risk, one = names.risk_name(outcome), lines[0 if view.ratios else view.place].effect
+    name, ratio = carriable_name(outcome, one), names.effect_name(outcome, "risk_ratio")
+    found = [RATIO_TEXT.format(name=name, ratio=ratio) if view.ratios else KEEPS.format(risk=risk)]
+    if isinstance(one.figure.interval, Gap):
+        found.append(NO_BAND.format(name=name))
+    else:
+        level = limits.interval_name(_level(findings, choices, one))
+        found.append(BAND.format(level=level, name=name, risk=risk))
+    if not view.ratios:
+        chosen = lines[view.place]
+        if any(
+            isinstance(end, Gap) and end.key in limits.WITHHELD_ENDS
+            for point in chosen.points
+            for end in (point.low, point.high)
+        ):
+            found.append(OPEN_BAND)
+    if not isinstance(findings.patient, Gap) and findings.patient.other_span is not None:
+        found.append(OTHER_SPAN)
+    found += [LEFT_OUT.format(name=carriable_name(outcome, left)) for left in curve.left_out]
+    return tuple(found)
+
+
+def _level(findings: OutcomeFindings, choices: Choices, one: Carriable) -> float:
+    """The level of an effect's interval; an adjusted one beside counts keeps that of its print."""
+    adjusted = findings.extras.adjusted
+    if one.adjusted and findings.form != "effect-only" and isinstance(adjusted, PrintedFigure):
+        return adjusted.level or USUAL_LEVEL
+    return shown_choices(findings, choices).level
+
+
+def _nearest(line: CurveLine, start: float) -> float:
+    """The starting risk of the point that is nearest."""
+    return min((point.start for point in line.points), key=lambda at: abs(at - start))
+
+
+def _point(line: CurveLine, start: float) -> CurvePoint:
+    return min(line.points, key=lambda point: abs(point.start - start))
+
+
+def _cell(point: CurvePoint, ratios: bool) -> str:
+    """``6.5% (4.4 to 9.4%)``."""
+    if isinstance(point.value, Gap):
+        return limits.WITHHELD_ENDS.get(point.value.key, UNDETERMINED)
+    write = numbers.ratio if ratios else numbers.percent
+    if isinstance(point.low, Gap) and isinstance(point.high, Gap):
+        return write(point.value)
+    ends = []
+    for end, sign in ((point.low, ""), (point.high, "%")):
+        if isinstance(end, Gap):
+            ends.append(limits.WITHHELD_ENDS.get(end.key, UNDETERMINED))
+        elif ratios:
+            ends.append(numbers.ratio_limit(end, point.value))
+        else:
+            ends.append(numbers.percent_limit(end, point.value, sign))
+    return f"{write(point.value)} ({numbers.TO.join(ends)})"
