@@ -2,12 +2,13 @@
 
 from __future__ import annotations
 
+from itertools import pairwise
 from pathlib import Path
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer
 from PySide6.QtGui import QAction, QImage, QKeySequence, QPainter, QPaintEvent, QPen, QResizeEvent
-from PySide6.QtWidgets import QCheckBox, QDialog, QHBoxLayout, QScrollArea, QVBoxLayout, QWidget
+from PySide6.QtWidgets import QDialog, QHBoxLayout, QScrollArea, QVBoxLayout, QWidget
 
 from fourcount.face import handout_dialogs
 from fourcount.face.buttons import Button
@@ -15,6 +16,7 @@ from fourcount.face.fields import ChoiceField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.handout_pages import Candidate, candidates, page_of
 from fourcount.face.handout_print import print_page
+from fourcount.face.handout_tick import LONGEST_NAME, Tick
 from fourcount.face.page_file import write_page
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.face.text import Words
@@ -35,7 +37,6 @@ PAUSE = 250
 """Milliseconds after the last change of the record before the page is made anew."""
 
 PANEL = 300
-LONGEST_NAME = 60
 
 
 def open_handout(window: MainWindow) -> HandoutWindow | None:
@@ -50,6 +51,7 @@ def open_handout(window: MainWindow) -> HandoutWindow | None:
     handout.show()
     handout.raise_()
     handout.activateWindow()
+    handout.save.setFocus(Qt.FocusReason.OtherFocusReason)
     return handout
 
 
@@ -94,25 +96,6 @@ class Preview(QWidget):
         painter.setPen(QPen(self._look.colour("accent" if focused else "hairline"), 2 if focused else 1))
         painter.drawRect(self.rect().adjusted(0, 0, -1, -1))
         painter.end()
-
-
-class Tick(QCheckBox):
-    """One outcome of the record; one that is not ready cannot be ticked, and says why."""
-
-    def __init__(self, place: int) -> None:
-        super().__init__()
-        self.place = place
-
-    def show_candidate(self, one: Candidate, look: Look) -> None:
-        """Show its name and whether it is on the page."""
-        name = one.name if len(one.name) <= LONGEST_NAME else f"{one.name[:LONGEST_NAME]}…"
-        self.setText(name.replace("&", "&&"))
-        self.setAccessibleName(one.name)
-        self.setAccessibleDescription(one.why)
-        self.setEnabled(not one.why)
-        self.setChecked(one.outcome.on_handout and not one.why)
-        self.setFont(look.font("body"))
-        self.setMinimumHeight(look.px(26))
 
 
 class HandoutWindow(QDialog):
@@ -173,8 +156,7 @@ class HandoutWindow(QDialog):
         buttons = FlowLayout(self._look, gap=8)
         self.save = Button(self._look, labels.SAVE, self.save_action, filled=True)
         self.print = Button(self._look, labels.PRINT, self.print_action)
-        self.close_button = Button(self._look, labels.CLOSE, self.close_action)
-        for button in (self.save, self.print, self.close_button):
+        for button in (self.save, self.print):
             buttons.addWidget(button)
         self._column.addLayout(buttons)
         self._column.addStretch(1)
@@ -219,12 +201,15 @@ class HandoutWindow(QDialog):
             self._list.removeWidget(tick)
             tick.deleteLater()
         while len(self._ticks) < len(found):
-            tick = Tick(len(self._ticks))
+            tick = Tick(self._look, len(self._ticks))
             tick.clicked.connect(self._on_ticked)
             self._list.addWidget(tick)
             self._ticks.append(tick)
+        order = [*self._ticks, self.paper, self.save, self.print, self.preview]
+        for before, after in pairwise(order):
+            self.setTabOrder(before, after)
         for tick, one in zip(self._ticks, found, strict=True):
-            tick.show_candidate(one, self._look)
+            tick.show_candidate(one)
         said = [labels.NOT_READY.format(name=one.name[:LONGEST_NAME], why=one.why) for one in found if one.why]
         self.notes.show_words("\n".join(said))
 
@@ -279,7 +264,4 @@ class HandoutWindow(QDialog):
         self._column.setContentsMargins(px(20), px(20), px(20), px(20))
         self._column.setSpacing(px(12))
         self._list.setSpacing(px(4))
-        for tick in self._ticks:
-            tick.setFont(self._look.font("body"))
-            tick.setMinimumHeight(px(26))
         self.setPalette(self._look.qt_palette())

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from fourcount.record.outcome import Certainty, Design
 
-MISSING = "A patient is shown nothing before it has a name. Still missing: {items}."
+MISSING = "Before a patient is shown this, fill in {items}."
 ITEMS = {
     "the event": "the event in words",
     "the reference group": "the name of the reference group",
