@@ -5,7 +5,16 @@ from __future__ import annotations
 from hypothesis import strategies as st
 
 from forms import at_time, effect_only, of_total, paired, person_time, strata
-from fourcount.record.outcome import DESIGNS, PAPER_MEASURES
+from fourcount.record.outcome import (
+    DESIGNS,
+    EFFECTS,
+    LINE_KINDS,
+    LINE_SCALES,
+    LINE_SIDES,
+    PAPER_MEASURES,
+    START_KINDS,
+    Patient,
+)
 
 count = st.integers(0, 40) | st.sampled_from((10**5, 10**9)) | st.just("")
 time = st.sampled_from(("10", "4,120", "0.5", "0", "10^9", "4,120 days", "", "x")) | st.integers(1, 10**6)
@@ -16,7 +25,26 @@ effects = st.sampled_from((
     "-7.9% (-12 to 2)", "1.5, p = 0.03", "aOR 2.3 (1.1 to 4.8)", "x", "0.72 (0.92 to 0.55)", "12 per 1000 (3 to 20)",
 ))  # fmt: skip
 labels = st.sampled_from(("", "ACE inhibitor", "{x}", "%s", " "))
+spans = st.sampled_from(("", "5 years", "1 day", "0 years", "x"))
+risks = st.sampled_from(("", "12%", "0%", "100%", "x", "24 of 200", "12% (9 to 15)", "0 of 30", "0.001%", "99%"))
 small = st.sampled_from(("", "0", "5", "30", "x"))
+
+
+@st.composite
+def patients(draw):
+    """Whatever may be typed of one patient, in any way of giving the starting risk."""
+    return Patient(
+        start_kind=draw(st.sampled_from(START_KINDS)),
+        starting_risk_text=draw(risks),
+        low_risk_text=draw(st.sampled_from(("", "5%", "0%", "40%", "x"))),
+        high_risk_text=draw(st.sampled_from(("", "30%", "100%", "2%", "x"))),
+        rate_text=draw(st.sampled_from(("", "12 per 1,000 person-years", "0.4/month", "0 per year", "x"))),
+        overall_risk_text=draw(st.sampled_from(("", "12%", "0%", "100%", "x"))),
+        exposed_share_text=draw(st.sampled_from(("", "30%", "0%", "100%", "x"))),
+        starting_risk_source_text=draw(st.sampled_from(("", "a {register}"))),
+        other_span_text=draw(spans),
+        effect=draw(st.sampled_from(EFFECTS)),
+    )
 
 
 @st.composite
@@ -39,6 +67,11 @@ def common(draw):
         "second_lost_text": draw(small),
         "first_randomised_text": draw(st.sampled_from(("", "450"))),
         "icc_text": draw(st.sampled_from(("", "0.02", "2", "x"))),
+        "patient": draw(patients()),
+        "line_kind": draw(st.sampled_from(LINE_KINDS)),
+        "line_scale": draw(st.sampled_from(LINE_SCALES)),
+        "line_side": draw(st.sampled_from(LINE_SIDES)),
+        "line_text": draw(st.sampled_from(("", "5 per 100", "0.8", "1.2", "x"))),
         "cluster_size_text": draw(st.sampled_from(("", "21"))),
     }
 
@@ -47,7 +80,6 @@ def common(draw):
 def outcomes(draw):
     """One outcome of any form but four counts as ``38 · 374``, which other tests draw."""
     fields, four = draw(common()), st.tuples(count, count, count, count)
-    risk = draw(st.sampled_from(("", "12%", "0%", "100%", "x")))
     return draw(
         st.one_of(
             st.builds(lambda cells: of_total(cells, **fields), four),
@@ -55,12 +87,12 @@ def outcomes(draw):
             st.builds(lambda cells: person_time(cells, **fields), st.tuples(count, time, count, time)),
             st.builds(lambda cells: at_time(cells, **fields), st.tuples(percentage, bounds, percentage, bounds)),
             st.builds(
-                lambda measure, text: effect_only(measure, text, risk, **fields),
+                lambda measure, text: effect_only(measure, text, **fields),
                 st.sampled_from(PAPER_MEASURES),
                 effects,
             ),
             st.builds(
-                lambda rows: strata(rows=[(f"row {i}", *row) for i, row in enumerate(rows)], risk=risk, **fields),
+                lambda rows: strata(rows=[(f"row {i}", *row) for i, row in enumerate(rows)], **fields),
                 st.lists(st.tuples(count, count, count, count), max_size=4),
             ),
         )

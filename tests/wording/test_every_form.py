@@ -17,9 +17,12 @@ from fourcount.wording.extras import extra_lines
 from fourcount.wording.form import opens_more
 from fourcount.wording.gaps import mark_text
 from fourcount.wording.lines import measure_lines
+from fourcount.wording.own_line import own_line_sentence
 from fourcount.wording.patient import patient_words
+from fourcount.wording.patient_sentence import patient_sentence
+from fourcount.wording.patient_table import patient_table, patient_table_head
 from fourcount.wording.sentence import headline, measure_sentence, p_sentence
-from fourcount.wording.working import working
+from fourcount.wording.working import PATIENT, working
 
 BANNED = re.compile(r"\b(significan\w*|likely|chance|chances|nan|None|inf|should|recommend\w*)\b")
 PRINTED_SOURCE = ("Formula", "Source", "Note")  # the methods' own words
@@ -43,6 +46,14 @@ def all_texts(outcome, choices, *, with_working):
     for caution in findings.cautions:
         yield from (caution_text(caution), caution_title(caution))
     yield from (mark_text(mark) for mark in findings.marks)
+    yield own_line_sentence(outcome, findings)
+    yield patient_sentence(outcome, findings, choices)
+    yield from (cell for row in patient_table(outcome, findings, choices) for cell in row)
+    yield from patient_table_head(outcome, findings, choices)
+    if with_working:
+        found = working(PATIENT, outcome, findings, choices)
+        yield from (found.title, found.sentence)
+        yield from (text for label, text in found.rows if label not in PRINTED_SOURCE)
     words = patient_words(outcome, findings, choices, None)
     for name in words.__slots__:
         value = getattr(words, name)

@@ -62,7 +62,8 @@ def _worked_out(outcome: Outcome, patient: PatientFindings) -> str:
     """From which rate, or from which overall risk, a starting risk follows."""
     typed = outcome.patient
     if patient.start_from == "rate":
-        over = f" over {spans.duration(patient.study_span)}" if patient.study_span and not patient.other_span else ""
+        span = None if patient.study_span and patient.other_span else patient.study_span or patient.other_span
+        over = f" over {spans.duration(span)}" if span else ""
         return FROM_RATE.format(rate=names.bare(typed.rate_text), over=over)
     if patient.start_from == "overall":
         overall = _as_risk(read_risk(typed.overall_risk_text), typed.overall_risk_text)

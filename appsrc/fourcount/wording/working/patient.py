@@ -68,11 +68,12 @@ def _starting(outcome: Outcome, patient: PatientFindings) -> list[Row]:
 def _from_rate(outcome: Outcome, patient: PatientFindings) -> str:
     """``1 − exp(−0.012 × 10) = 0.1131``, the rate in years where it stands over a span in years."""
     rate, result = read_rate(outcome.patient.rate_text), plain(patient.baseline)
-    if not isinstance(rate, RateReading) or patient.study_span is None:
+    span = patient.study_span or patient.other_span
+    if not isinstance(rate, RateReading) or span is None:
         return result
     a_year = rate.value * DAYS_IN["year"] / DAYS_IN[rate.unit]
     return (
-        f"1 − exp(−{plain(a_year)} × {quantity(patient.study_span.years)}) = {result}, the rate and the time in years"
+        f"1 − exp(−{plain(a_year)} × {quantity(span.years)}) = {result}, the rate and the time in years"
     )
 
 
