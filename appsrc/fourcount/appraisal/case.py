@@ -5,6 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass, field
 
 from fourcount.appraisal.findings import (
+    Carriable,
     Conversion,
     Counts,
     Extras,
@@ -14,6 +15,7 @@ from fourcount.appraisal.findings import (
     Given,
     Interval,
     Mark,
+    OwnLine,
     PatientFindings,
     Probability,
     Range,
@@ -52,6 +54,8 @@ class Case:
     extras: Extras = field(default_factory=Extras)
     strata: StrataFindings | Gap | None = None
     randomised: tuple[Randomised, ...] = ()
+    carriable: tuple[Carriable, ...] = ()
+    line: OwnLine | Gap | None = None
 
     @property
     def counts(self) -> Counts:
@@ -66,8 +70,8 @@ class Case:
 
     @property
     def carried(self) -> PatientFindings | None:
-        """The patient's findings where a starting risk was typed and an effect carried to it."""
-        if isinstance(self.patient, Gap) or self.patient.baseline_from != "given":
+        """The patient's findings where they are not the study's own risks, but an effect carried to a starting risk."""
+        if isinstance(self.patient, Gap) or self.patient.range_from == "table":
             return None
         return self.patient
 

@@ -4,30 +4,8 @@ from __future__ import annotations
 
 from collections.abc import Callable
 
-from fourcount.appraisal.findings import Conversion, Figure, Gap, Interval, Range
-from fourcount.appraisal.measures import Figures
-from fourcount.appraisal.starting_risk import StartingRisk
+from fourcount.appraisal.findings import Figure, Gap, Interval, Range
 from fourcount.stats.conversion import risk_ratio_from_odds_ratio
-
-
-def convert(figures: Figures, start: StartingRisk) -> Conversion:
-    """Zhang and Yu's risk ratio (1998, JAMA 280:1690) of the estimate and of each limit at one starting risk.
-
-    At the table's own reference risk that is the table's own risk ratio, so its direct interval stands there. Limits
-    converted at an estimated risk as if it were certain can cover far too seldom: at 95%, with 50 people a group and
-    true risks of 90% v 60%, only 59% of the time (by enumeration of all tables).
-    """
-    odds_ratio = figures["odds_ratio"]
-    ratio = _direct(odds_ratio, figures) if start.origin == "reference" else converted_figure(odds_ratio, start.value)
-    return Conversion(baseline=start.value, baseline_from=start.origin, risk_ratio=ratio)
-
-
-def _direct(odds_ratio: Figure, figures: Figures) -> Figure:
-    """The table's risk ratio; without an odds ratio there is nothing to see as one."""
-    ratio = figures["risk_ratio"]
-    if isinstance(odds_ratio.estimate, Gap):
-        return Figure(estimate=odds_ratio.estimate, interval=odds_ratio.estimate, method=ratio.method)
-    return ratio
 
 
 def converted_figure(odds_ratio: Figure, baseline: float) -> Figure:

@@ -6,8 +6,8 @@ from collections.abc import Mapping
 from dataclasses import dataclass, field, replace
 from types import MappingProxyType
 
-from fourcount.appraisal.findings import MEASURES, PAIR_MEASURES, RATE_MEASURES, TIMED_MEASURES
-from fourcount.record.outcome import PAIRED_DESIGNS, Design, Effect, Outcome
+from fourcount.appraisal.findings import MEASURES, PAIR_MEASURES, RATE_MEASURES, TIMED_MEASURES, CarriedEffect
+from fourcount.record.outcome import PAIRED_DESIGNS, Design, Outcome
 
 Withheld = Mapping[str, str]
 
@@ -25,21 +25,17 @@ _NO_RISK = _all(tuple(key for key in MEASURES if key != "odds_ratio"), "design-c
 class Support:
     """What one design supports.
 
-    ``withheld`` maps a measure to the key of the reason for which it is not given. ``carries`` lists the
-    effects that may be carried to a patient. ``own_starting_risk`` says whether the reference group's risk
-    is a risk of people at all. ``patient_number_needed`` is the reason for which the patient has none, if any.
-    ``refused`` is the reason for which the table says nothing at all in this design, if any.
+    ``withheld`` maps a measure to the key of the reason for which it is not given. ``carries`` lists the effects of a
+    table that may be carried to a patient, the usual one first. ``own_starting_risk`` says whether the reference
+    group's risk is a risk of people at all. ``patient_number_needed`` is the reason for which the patient has none, if
+    any. ``refused`` is the reason for which the table says nothing at all in this design, if any.
     """
 
     withheld: Withheld = field(default_factory=lambda: NOTHING_WITHHELD)
-    carries: tuple[Effect, ...] = ("risk_ratio", "odds_ratio")
+    carries: tuple[CarriedEffect, ...] = ("risk_ratio", "odds_ratio", "risk_difference")
     own_starting_risk: bool = True
     patient_number_needed: str | None = None
     refused: str | None = None
-
-    def effect(self, chosen: Effect) -> Effect:
-        """The effect to carry: the chosen one where this design has it, else the one it has."""
-        return chosen if chosen in self.carries or not self.carries else self.carries[0]
 
 
 def _refused(reason: str) -> Support:

@@ -2,12 +2,12 @@
 
 from __future__ import annotations
 
+from fourcount.appraisal.carrying.starts import typed_value
 from fourcount.appraisal.extras.attributable import of_exposed, prevented
 from fourcount.appraisal.extras.e_values import COMMON, OBSERVATIONAL, e_values
 from fourcount.appraisal.extras.printed import RATIOS, ReadEffect, as_figure
 from fourcount.appraisal.findings import Clusters, Counts, EValues, Extras, Figure, Gap
-from fourcount.appraisal.starting_risk import typed_risk
-from fourcount.record.entry.readings import Proportion
+from fourcount.record.entry.starts import read_start
 from fourcount.record.outcome import Outcome
 
 
@@ -49,6 +49,6 @@ def e_value_of(
 def outcome_is_common(outcome: Outcome, counts: Counts | None) -> bool:
     """Whether over 15% have the event: of the table's people; of a case-control study's by a typed starting risk."""
     if outcome.design in ("case-control", "matched") or counts is None:
-        typed = typed_risk(outcome)
-        return isinstance(typed, Proportion) and typed.value > COMMON
+        typed = typed_value(read_start(outcome.patient))
+        return typed is not None and typed > COMMON
     return counts.total > 0 and counts.events / counts.total > COMMON

@@ -8,6 +8,7 @@ import msgspec
 
 from fourcount.appraisal.findings.figures import AnyNumberNeeded, Figure
 from fourcount.record.entry.readings import Duration
+from fourcount.record.paper import USUAL_LEVEL
 from fourcount.stats.results import Gap, Interval
 
 CarriedEffect = Literal["risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference"]
@@ -31,7 +32,8 @@ class Carriable(msgspec.Struct, frozen=True, kw_only=True):
 
     ``effect`` is the kind of measure, ``measure`` the key under which its figure stands ("pooled_risk_ratio",
     "pair_odds_ratio", "hazard_ratio"). ``adjusted`` says that it is the adjusted effect that the paper prints beside
-    its counts. ``adjusted_for`` is what for, as typed.
+    its counts. ``adjusted_for`` is what for, as typed. ``level`` is that of the figure's interval, as a fraction: a
+    printed one keeps its own.
     """
 
     effect: CarriedEffect
@@ -39,6 +41,7 @@ class Carriable(msgspec.Struct, frozen=True, kw_only=True):
     figure: Figure
     adjusted: bool = False
     adjusted_for: str = ""
+    level: float = USUAL_LEVEL
 
 
 class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
@@ -54,7 +57,7 @@ class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
     ``start_from`` says where the starting risk comes from, ``start_interval`` its own limits. ``study_span`` and
     ``other_span`` are the study's time span and the one carried to, where another was asked for. ``rank`` is "low",
     "usual" or "high" of three starting risks; ``others`` then holds the low and the high one's findings, the usual
-    one's being these; a Gap stands where one cannot be given.
+    one's being these; a Gap stands where one cannot be given. ``level`` is that of all intervals here but a typed start's.
     """
 
     baseline: float
@@ -77,6 +80,7 @@ class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
     rank: Rank = ""
     low: PatientFindings | Gap | None = None
     high: PatientFindings | Gap | None = None
+    level: float = USUAL_LEVEL
 
 
 class OwnLine(msgspec.Struct, frozen=True, kw_only=True):

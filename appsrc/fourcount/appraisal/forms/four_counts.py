@@ -2,38 +2,36 @@
 
 from __future__ import annotations
 
+from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
+from fourcount.appraisal.carrying.of_table import study_of_counts
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import clusters_of
-from fourcount.appraisal.conversion import convert
 from fourcount.appraisal.extras.of_counts import extras_of_counts
 from fourcount.appraisal.extras.printed import adjusted_of
 from fourcount.appraisal.findings import (
     MEASURES,
-    Conversion,
     Gap,
     OutcomeFindings,
-    PatientFindings,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import whole
-from fourcount.appraisal.gating import Support, support_of
+from fourcount.appraisal.gating import support_of
 from fourcount.appraisal.losses import losses_of
-from fourcount.appraisal.measures import Figures, Table, all_figures, measures, own_test
-from fourcount.appraisal.patient import carry
+from fourcount.appraisal.measures import Table, all_figures, measures, own_test
+from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import NOTHING, Pace, postponed
-from fourcount.appraisal.starting_risk import StartingRisk, marks_of, starting_risk, typed_risk
 from fourcount.appraisal.table import read
+from fourcount.record.entry.starts import read_start
 from fourcount.record.outcome import Form, Outcome, form_of
 from fourcount.record.paper import Choices
-from fourcount.stats.estimates import risk
 
 
 def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFindings:
     """All that four counts say, whichever of three ways they are printed in."""
-    form, reading, typed = form_of(outcome.table), read(outcome), typed_risk(outcome)
+    form, reading, typed = form_of(outcome.table), read(outcome), read_start(outcome.patient)
     clusters, adjusted = clusters_of(outcome), adjusted_of(outcome)
     losses = losses_of(outcome, reading.counts)
-    marks = reading.marks + marks_of(typed) + clusters.marks + losses.marks + adjusted.marks
+    marks = reading.marks + marks_of(outcome, typed) + clusters.marks + losses.marks + adjusted.marks
     if isinstance(reading.counts, Gap):
         return nothing_yet(
             _lacking(reading.counts, form), form=form, measures=MEASURES, totals=reading.totals, marks=marks
@@ -42,8 +40,11 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     later = postponed(counts, choices, pace.loaded) if pace.deferring else NOTHING
     table = Table(counts=counts, choices=choices, postponed=later, behind=clusters.behind(counts))
     figures = all_figures(table, support)
-    start = starting_risk(typed, risk(counts.reference_events, counts.reference_total), support)
-    conversion, patient = _at(start, figures, outcome, support)
+    study = study_of_counts(outcome, figures, support, adjusted, choices.level)
+    carried = for_a_patient(study, typed)
+    shown = measures(figures, support, welcome=outcome.welcome)
+    effective = table.effective
+    line, line_marks = own_line(outcome, shown, None if isinstance(effective, Gap) else effective, choices.level)
     case = Case(
         outcome=outcome,
         form=form,
@@ -51,27 +52,17 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         choices=choices,
         figures=figures,
         test=Gap(support.refused) if support.refused else own_test(table),
-        conversion=conversion,
-        patient=patient,
-        marks=marks,
+        conversion=carried.conversion,
+        patient=carried.patient,
+        marks=marks + carried.marks + line_marks,
         extras=extras_of_counts(outcome, counts, table, figures, clusters, losses, adjusted, pace),
         randomised=losses.randomised,
+        carriable=study.carriable,
+        line=line,
     )
-    return whole(case, measures(figures, support, welcome=outcome.welcome), reading.totals)
+    return whole(case, shown, reading.totals)
 
 
 def _lacking(gap: Gap, form: Form) -> Gap:
     """Why there are no counts; where nothing but percentages and totals is to be typed, counts are not asked for."""
     return Gap("percents-not-typed") if form == "percent-of-total" and gap.key == "not-typed" else gap
-
-
-def _at(
-    start: StartingRisk | Gap, figures: Figures, outcome: Outcome, support: Support
-) -> tuple[Conversion | Gap, PatientFindings | Gap]:
-    """The two parts that hang on a starting risk."""
-    if support.refused:
-        return Gap(support.refused), Gap(support.refused)
-    if isinstance(start, Gap):
-        return start, start
-    effect = support.effect(outcome.patient.effect)
-    return (convert(figures, start), carry(figures, start, effect, support, welcome=outcome.welcome))

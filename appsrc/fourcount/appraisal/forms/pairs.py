@@ -4,6 +4,8 @@ from __future__ import annotations
 
 from collections.abc import Callable
 
+from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
+from fourcount.appraisal.carrying.of_table import study_of_pairs
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
@@ -21,10 +23,12 @@ from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import Withheld, withheld_of_pairs
 from fourcount.appraisal.measures import number_needed_from
+from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import NOTHING, PAIRS_NEED_NUMPY, Pace
 from fourcount.appraisal.reach import within_everybody
 from fourcount.record.entry.pairs import read_pairs
 from fourcount.record.entry.readings import PairsReading
+from fourcount.record.entry.starts import read_start
 from fourcount.record.outcome import Outcome, Pairs
 from fourcount.record.paper import Choices
 from fourcount.stats import pairs as stats
@@ -40,8 +44,9 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     Where concordant pairs are not typed, what needs them is withheld and the odds ratio stands.
     """
     reading = read_pairs(outcome.table) if isinstance(outcome.table, Pairs) else PairsReading()
-    clusters, adjusted = clusters_of(outcome), adjusted_of(outcome)
-    marks, totals = reading.marks + clusters.marks + adjusted.marks, _totals(reading)
+    clusters, adjusted, typed = clusters_of(outcome), adjusted_of(outcome), read_start(outcome.patient)
+    marks = reading.marks + marks_of(outcome, typed) + clusters.marks + adjusted.marks
+    totals = _totals(reading)
     lacking = _lacking(reading)
     if lacking is not None:
         return nothing_yet(lacking, form="pairs", measures=PAIR_MEASURES, totals=totals, marks=marks)
@@ -52,7 +57,10 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     by = ByMethod(level=choices.level, without=clusters.elsewhere, waiting=waiting)
     figures = _figures(pairs, family, by, withheld)
     refused = withheld.get("pair_odds_ratio")
-    nothing = Gap(refused or "carried-later")
+    measures = {key: _measure(key, figures, withheld, welcome=outcome.welcome) for key in PAIR_MEASURES}
+    study = study_of_pairs(outcome, figures, withheld, adjusted, choices.level)
+    carried = for_a_patient(study, typed)
+    line, line_marks = own_line(outcome, measures, None, choices.level)
     case = Case(
         outcome=outcome,
         form="pairs",
@@ -60,14 +68,15 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         choices=choices,
         figures=figures,
         test=Gap(refused) if refused else by.probability(family.test, pairs),
-        conversion=nothing,
-        patient=nothing,
-        marks=marks,
+        conversion=carried.conversion,
+        patient=carried.patient,
+        marks=marks + carried.marks + line_marks,
         extras=extras_of_ratio(
             outcome, figures.get("pair_odds_ratio"), "odds_ratio", adjusted, clusters=clusters.clusters
         ),
+        carriable=study.carriable,
+        line=line,
     )
-    measures = {key: _measure(key, figures, withheld, welcome=outcome.welcome) for key in PAIR_MEASURES}
     return whole(case, measures, totals)
 
 

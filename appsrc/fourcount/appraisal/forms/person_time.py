@@ -2,6 +2,9 @@
 
 from __future__ import annotations
 
+from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
+from fourcount.appraisal.carrying.of_table import study_of_rates
+from fourcount.appraisal.carrying.study import Study
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
@@ -18,9 +21,11 @@ from fourcount.appraisal.forms.by_method import ByMethod
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import withheld_of_rates
+from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import NOTHING, RATES_NEED_NUMPY, Pace
 from fourcount.record.entry.person_time import read_person_time
 from fourcount.record.entry.readings import GroupRate, PersonTimeReading
+from fourcount.record.entry.starts import read_start
 from fourcount.record.outcome import Outcome, PersonTime
 from fourcount.record.paper import Choices
 from fourcount.stats import rates as stats
@@ -31,8 +36,9 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     """Both rates, their difference and ratio. Person-time has events alone, so that nothing else can be counted."""
     table = outcome.table
     reading = read_person_time(table) if isinstance(table, PersonTime) else _BLANK
-    clusters, adjusted = clusters_of(outcome), adjusted_of(outcome)
-    marks, totals = reading.marks + clusters.marks + adjusted.marks, _totals(reading)
+    clusters, adjusted, typed = clusters_of(outcome), adjusted_of(outcome), read_start(outcome.patient)
+    marks = reading.marks + marks_of(outcome, typed) + clusters.marks + adjusted.marks
+    totals = _totals(reading)
     rates = _rates(reading, outcome)
     if isinstance(rates, Gap):
         return nothing_yet(rates, form="person-time", measures=RATE_MEASURES, totals=totals, marks=marks)
@@ -41,22 +47,31 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     waiting = RATES_NEED_NUMPY if pace.without_numpy else NOTHING
     by = ByMethod(level=choices.level, without=clusters.elsewhere, waiting=waiting)
     figures = {} if withheld else _figures(rates, family, by)
-    nothing = Gap(withheld["rate_ratio"]) if withheld else Gap("carried-later")
+    refused = Gap(withheld["rate_ratio"]) if withheld else None
+    study = (
+        study_of_rates(outcome, figures, adjusted, choices.level)
+        if refused is None
+        else Study(outcome=outcome, carriable=(), refused=refused)
+    )
+    carried = for_a_patient(study, typed)
+    measures: dict[str, Measure] = {
+        key: Gap(withheld[key]) if key in withheld else given_or_why(figures[key]) for key in RATE_MEASURES
+    }
+    line, line_marks = own_line(outcome, measures, None, choices.level)
     case = Case(
         outcome=outcome,
         form="person-time",
         given=rates,
         choices=choices,
         figures=figures,
-        test=nothing if withheld else by.probability(family.test, rates),
-        conversion=nothing,
-        patient=nothing,
-        marks=marks,
+        test=by.probability(family.test, rates) if refused is None else refused,
+        conversion=carried.conversion,
+        patient=carried.patient,
+        marks=marks + carried.marks + line_marks,
         extras=extras_of_ratio(outcome, figures.get("rate_ratio"), "rate_ratio", adjusted, clusters=clusters.clusters),
+        carriable=study.carriable,
+        line=line,
     )
-    measures: dict[str, Measure] = {
-        key: Gap(withheld[key]) if key in withheld else given_or_why(figures[key]) for key in RATE_MEASURES
-    }
     return whole(case, measures, totals)
 
 

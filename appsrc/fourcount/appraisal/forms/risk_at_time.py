@@ -2,6 +2,9 @@
 
 from __future__ import annotations
 
+from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
+from fourcount.appraisal.carrying.of_table import study_of_risks
+from fourcount.appraisal.carrying.study import Study
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
 from fourcount.appraisal.extras.printed import PRINTED, adjusted_of
@@ -11,18 +14,17 @@ from fourcount.appraisal.findings import (
     Gap,
     Interval,
     OutcomeFindings,
-    PatientFindings,
     TimedRisks,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import SUPPORT, withheld_of_timed
 from fourcount.appraisal.measures import number_needed_from
-from fourcount.appraisal.patient import carry
+from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import Pace
-from fourcount.appraisal.starting_risk import Typed, marks_of, starting_risk, typed_risk
 from fourcount.record.entry.readings import PrintedRisk, RiskAtTimeReading
 from fourcount.record.entry.risk_at_time import read_risk_at_time
+from fourcount.record.entry.starts import read_start
 from fourcount.record.outcome import Outcome, RiskAtTime
 from fourcount.record.paper import USUAL_LEVEL, Choices
 from fourcount.stats import timed as stats
@@ -36,8 +38,8 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     """The printed risks, their difference, number needed and ratio, at the level at which the limits are printed."""
     table = outcome.table
     reading = read_risk_at_time(table) if isinstance(table, RiskAtTime) else _BLANK
-    adjusted, typed = adjusted_of(outcome), typed_risk(outcome)
-    marks = reading.marks + marks_of(typed) + adjusted.marks
+    adjusted, typed = adjusted_of(outcome), read_start(outcome.patient)
+    marks = reading.marks + marks_of(outcome, typed) + adjusted.marks
     index, reference = _oriented(reading, outcome)
     lacking = _lacking(reading, index, reference)
     if lacking is not None:
@@ -46,6 +48,16 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     timed = _timed(index, reference, reading.level)
     figures = {key: figure for key, figure in _figures(index, reference, timed).items() if key not in withheld}
     nothing = Gap(withheld.get("risk_ratio", "not-counts"))
+    study = (
+        study_of_risks(outcome, figures, SUPPORT[outcome.design], adjusted, reading.level)
+        if "risk_ratio" in figures
+        else Study(outcome=outcome, carriable=(), refused=nothing)
+    )
+    carried = for_a_patient(study, typed)
+    measures: dict[str, Measure] = {}
+    for key in TIMED_MEASURES:
+        measures[key] = Gap(withheld[key]) if key in withheld else _measure(key, figures, welcome=outcome.welcome)
+    line, line_marks = own_line(outcome, measures, None, reading.level)
     case = Case(
         outcome=outcome,
         form="risk-at-time",
@@ -53,14 +65,13 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         choices=choices,
         figures=figures,
         test=nothing,
-        conversion=nothing,
-        patient=_patient(typed, figures, outcome) if "risk_ratio" in figures else nothing,
-        marks=marks,
+        conversion=carried.conversion,
+        patient=carried.patient,
+        marks=marks + carried.marks + line_marks,
         extras=extras_of_ratio(outcome, figures.get("risk_ratio"), "risk_ratio", adjusted),
+        carriable=study.carriable,
+        line=line,
     )
-    measures: dict[str, Measure] = {}
-    for key in TIMED_MEASURES:
-        measures[key] = Gap(withheld[key]) if key in withheld else _measure(key, figures, welcome=outcome.welcome)
     return whole(case, measures)
 
 
@@ -68,15 +79,6 @@ def _lacking(reading: RiskAtTimeReading, index: PrintedRisk, reference: PrintedR
     if any(not mark.used for mark in reading.marks):
         return Gap("unreadable")
     return Gap("risks-not-typed") if index.risk is None or reference.risk is None else None
-
-
-def _patient(typed: Typed, figures: dict[str, Figure], outcome: Outcome) -> PatientFindings | Gap:
-    """The printed risks themselves, or their ratio at a typed starting risk, at the level of the printed limits."""
-    support = SUPPORT[outcome.design]
-    start = starting_risk(typed, figures["risk_reference"].estimate, support)
-    if isinstance(start, Gap):
-        return start
-    return carry(figures, start, "risk_ratio", support, welcome=outcome.welcome)
 
 
 _BLANK = RiskAtTimeReading(first=PrintedRisk(), second=PrintedRisk(), level=USUAL_LEVEL)

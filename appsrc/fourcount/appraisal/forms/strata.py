@@ -4,20 +4,19 @@ from __future__ import annotations
 
 from dataclasses import replace
 
+from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
+from fourcount.appraisal.carrying.of_table import study_of_strata
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import ReadClusters, clusters_of
-from fourcount.appraisal.conversion import converted_figure
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
 from fourcount.appraisal.extras.printed import ReadEffect, adjusted_of
 from fourcount.appraisal.findings import (
     MEASURES,
-    Conversion,
     Counts,
     Extras,
     Figure,
     Gap,
     OutcomeFindings,
-    PatientFindings,
     StrataFindings,
     StratumFindings,
 )
@@ -25,15 +24,15 @@ from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
 from fourcount.appraisal.gating import Support, support_of
 from fourcount.appraisal.measures import Table, all_figures, measures, number_needed_from, own_test
-from fourcount.appraisal.patient import carry_effect
+from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.pooling import cmh, homogeneity, interactions, parting, pooled_figures
 from fourcount.appraisal.postponing import NOTHING, Pace, postponed
 from fourcount.appraisal.reach import within_everybody
-from fourcount.appraisal.starting_risk import StartingRisk, Typed, marks_of, typed_risk
 from fourcount.appraisal.table import oriented, totals_of
-from fourcount.record.entry.readings import GroupCounts, Proportion, StratumReading, TableReading, Unreadable
+from fourcount.record.entry.readings import GroupCounts, StratumReading, TableReading
+from fourcount.record.entry.starts import read_start
 from fourcount.record.entry.strata import read_strata
-from fourcount.record.outcome import Effect, Outcome, Strata
+from fourcount.record.outcome import Outcome, Strata
 from fourcount.record.paper import Choices
 
 WITHIN = ("risk_index", "risk_reference", "risk_difference", "risk_ratio", "odds_ratio")
@@ -46,9 +45,9 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     The number needed is that of the pooled difference: the crude one may point the other way.
     """
     readings = read_strata(outcome.table) if isinstance(outcome.table, Strata) else ()
-    typed, clusters, adjusted = typed_risk(outcome), clusters_of(outcome), adjusted_of(outcome)
+    typed, clusters, adjusted = read_start(outcome.patient), clusters_of(outcome), adjusted_of(outcome)
     marks = tuple(mark for reading in readings for mark in reading.marks)
-    marks += marks_of(typed) + clusters.marks + adjusted.marks
+    marks += marks_of(outcome, typed) + clusters.marks + adjusted.marks
     used = [reading for reading in readings if not reading.blank]
     labels = [reading.label or str(place + 1) for place, reading in enumerate(readings) if not reading.blank]
     totals = totals_of(_summed(used))
@@ -61,7 +60,10 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     crude = all_figures(table, support)
     parts = _strata(strata, labels, table, crude, support, clusters.elsewhere)
     pooled = {} if isinstance(parts, Gap) else _given(parts)
-    conversion, patient = _for_a_patient(pooled, outcome, support, typed)
+    study = study_of_strata(outcome, pooled, support, adjusted, choices.level)
+    carried = for_a_patient(study, typed)
+    shown = _measures(crude, parts, support, outcome)
+    line, line_marks = own_line(outcome, {**shown, **pooled}, None, choices.level)
     case = Case(
         outcome=outcome,
         form="strata",
@@ -69,13 +71,15 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         choices=choices,
         figures={**crude, **pooled},
         test=Gap(support.refused) if support.refused else own_test(table),
-        conversion=conversion,
-        patient=patient,
-        marks=marks,
+        conversion=carried.conversion,
+        patient=carried.patient,
+        marks=marks + carried.marks + line_marks,
         extras=_extras(pooled, outcome, counts, adjusted, clusters),
         strata=parts,
+        carriable=study.carriable,
+        line=line,
     )
-    return whole(case, _measures(crude, parts, support, outcome), totals)
+    return whole(case, shown, totals)
 
 
 def _measures(
@@ -171,25 +175,3 @@ def _within(table: Table, support: Support) -> dict[str, Measure]:
 
 def _given(strata: StrataFindings) -> dict[str, Figure]:
     return {key: figure for key, figure in strata.pooled.items() if isinstance(figure, Figure)}
-
-
-def _for_a_patient(
-    pooled: dict[str, Figure], outcome: Outcome, support: Support, typed: Typed
-) -> tuple[Conversion | Gap, PatientFindings | Gap]:
-    """The pooled effect at a typed starting risk. Each stratum has a risk of its own, so none is taken from here."""
-    if support.refused:
-        return Gap(support.refused), Gap(support.refused)
-    if not isinstance(typed, Proportion):
-        gap = Gap("baseline-unreadable" if isinstance(typed, Unreadable) else "strata-need-baseline")
-        return gap, gap
-    start = StartingRisk(value=typed.value, origin="given")
-    odds_ratio = pooled.get("pooled_odds_ratio")
-    conversion: Conversion | Gap = Gap("carried-gap")
-    if odds_ratio is not None:
-        ratio = converted_figure(odds_ratio, start.value)
-        conversion = Conversion(baseline=start.value, baseline_from="given", risk_ratio=ratio)
-    effect: Effect = support.effect(outcome.patient.effect)
-    carried = pooled.get(f"pooled_{effect}")
-    if carried is None:
-        return conversion, Gap("carried-gap")
-    return conversion, carry_effect(carried, start, effect, support, welcome=outcome.welcome)

@@ -26,6 +26,8 @@ def whole(case: Case, measures: Mapping[str, Measure], totals: Totals | None = N
         cautions=cautions_for(case),
         strata=case.strata,
         extras=case.extras,
+        carriable=case.carriable,
+        line=case.line,
     )
 
 
