@@ -75,6 +75,7 @@ class Header(FieldsView):
         self._right.addWidget(bar)
         QWidget.setTabOrder(self.source, bar.tabs)
         QWidget.setTabOrder(bar.tabs, bar.plus)
+        self._align_bar()
 
     def tell(self, notice: str) -> None:
         """Show a notice for a while, in room that is kept for it."""
@@ -91,8 +92,9 @@ class Header(FieldsView):
         self._make_room(self.notice.sizeHint().width() if notice else 0)
 
     def _make_room(self, needed: int) -> None:
-        """While a long notice stands, what the reader is not typing in steps aside for it."""
-        bar = self.bar.sizeHint().width() + self._right.spacing() if self.bar else 0
+        """While a long notice stands, tabs draw together for it, and then what the reader is not typing in."""
+        self.notice.setMinimumWidth(0 if self._narrow else needed)
+        bar = self.bar.minimumSizeHint().width() + self._right.spacing() if self.bar else 0
         room = (self.width() - self._row.contentsMargins().left() * 2 - self._row.spacing() * 2) * 6 // 15 - bar
         aside = not self._narrow and needed > max(room, 0)
         typing = self.title if self.source.hasFocus() else self.source
@@ -110,8 +112,15 @@ class Header(FieldsView):
             self._narrow = narrow
             ways = QBoxLayout.Direction
             self._row.setDirection(ways.TopToBottom if narrow else ways.LeftToRight)
+            self._align_bar()
             self._on_look_changed()
             self._say(self.notice.text())
+
+    def _align_bar(self) -> None:
+        """At the right end, or at the left where everything stands under each other."""
+        if self.bar:
+            sides = Qt.AlignmentFlag
+            self._right.setAlignment(self.bar, sides.AlignLeft if self._narrow else sides.AlignRight)
 
     def show_state(self, record: Record) -> None:
         """Show the paper's own texts."""

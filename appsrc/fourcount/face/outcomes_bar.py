@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from PySide6.QtCore import QPoint, QRect, QSize, Qt, Signal
 from PySide6.QtGui import QAction, QContextMenuEvent, QMouseEvent, QPainter, QPaintEvent, QPen
-from PySide6.QtWidgets import QApplication, QHBoxLayout, QMenu, QSizePolicy, QTabBar, QToolButton, QWidget
+from PySide6.QtWidgets import QApplication, QHBoxLayout, QMenu, QSizePolicy, QTabBar, QWidget
 
 from fourcount.face.links import Link
 from fourcount.face.look import Look
@@ -19,6 +19,9 @@ NARROWEST_TAB = 48
 """Pixels at 100% text; a longer name ends in dots and stands whole in its tip."""
 
 ROUND = 3
+
+SCROLLERS = "QTabBar::scroller {{ width: {width}px; }} QToolButton {{ border: none; background: {page}; }}"
+"""The two arrows that are there while the tabs need more room: large enough to be hit, and flat."""
 
 
 class OutcomeTabs(QTabBar):
@@ -150,8 +153,7 @@ class OutcomeTabs(QTabBar):
 
     def _on_look_changed(self) -> None:
         self.setFont(self._look.font("strong"))
-        for button in self.findChildren(QToolButton):
-            button.setMinimumWidth(self._look.px(24))
+        self.setStyleSheet(SCROLLERS.format(width=2 * self._look.px(24), page=self._look.palette.page))
         self.updateGeometry()
         self.update()
 

@@ -20,7 +20,8 @@ from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.names import effect_name, sentence_case
 from fourcount.wording.patient import WHICH_PEOPLE, patient_words
 from fourcount.wording.patient_labels import TABLE_CORNER, TABLE_ROW
-from fourcount.wording.patient_table import Row, patient_table, patient_table_head, people_of
+from fourcount.wording.patient_table import Row, patient_table, patient_table_head
+from fourcount.wording.ranks import people_of
 
 
 class PatientView(NamedTuple):

@@ -65,7 +65,7 @@ class MainWindow(QMainWindow):
         self._settings = settings
         self._later = later
         self._painted = False
-        self._shown: Record | None = None
+        self._shown: tuple[Record, int] | None = None
         self.actions_by_key = commands_table.make_actions(self)
         self.header = Header(look)
         self.banner = Banner(look)
@@ -208,8 +208,8 @@ class MainWindow(QMainWindow):
             self.actions_by_key["curve"].setEnabled(self.patient.has_curve)
         title = record.title_text.strip()
         self.setWindowTitle(labels.TITLED_WINDOW.format(title=title) if title else labels.WINDOW_TITLE)
-        if record is not self._shown:
-            self._shown = record
+        if self._shown is None or record is not self._shown[0] or self.session.view != self._shown[1]:
+            self._shown = (record, self.session.view)
             self._end_notices()
         self._ask_for_the_rest()
 

@@ -78,7 +78,7 @@ class Figures(QWidget):
             buttons.addWidget(button)
         self._column = QVBoxLayout(self)
         self._column.setContentsMargins(0, 0, 0, 0)
-        for widget in (self.picture, self.relative, self.summary, self.detail):
+        for widget in (self.picture, self.summary, self.detail, self.relative):
             self._column.addWidget(widget)
         self._column.addLayout(buttons)
         self._column.addLayout(links)

@@ -6,7 +6,7 @@ from collections.abc import Mapping
 from typing import NamedTuple
 
 from PySide6.QtCore import Qt, Signal
-from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout, QWidget
+from PySide6.QtWidgets import QGridLayout, QVBoxLayout, QWidget
 
 from fourcount.face.fields import ChoiceField, FieldsView, TextField
 from fourcount.face.flow import FlowLayout
@@ -85,11 +85,9 @@ class QuietRow(FieldsView):
         self._layout = QGridLayout(self)
         self._layout.setContentsMargins(0, 0, 0, 0)
         self._layout.setColumnStretch(1, 1)
-        self._line = QHBoxLayout()
-        for widget in (*((self.choice,) if self.choice else ()), *self.fields):
-            self._line.addWidget(widget, 1)
         self._layout.addWidget(self._name, 0, 0)
-        self._layout.addLayout(self._line, 0, 1)
+        for line, widget in enumerate((*((self.choice,) if self.choice else ()), *self.fields)):
+            self._layout.addWidget(widget, line, 1)
         self._layout.addWidget(self.close_link, 0, 2, Qt.AlignmentFlag.AlignRight)
         self._pass_on(*self.fields)
         look.changed.connect(self._on_look_changed)
@@ -130,7 +128,7 @@ class QuietRow(FieldsView):
 
     def _on_look_changed(self) -> None:
         self._layout.setHorizontalSpacing(self._look.px(12))
-        self._line.setSpacing(self._look.px(12))
+        self._layout.setVerticalSpacing(self._look.px(2))
 
 
 class QuietRows(FieldsView):

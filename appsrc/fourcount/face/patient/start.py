@@ -53,7 +53,9 @@ class StartFields(FieldsView):
         self.kind = ChoiceField(look, START_KIND, tuple(START_KINDS.items()), plain=True, notes=START_NOTES)
         self.kind.chosen.connect(self.kind_chosen)
         rows.addWidget(self.kind, 0, 0)
-        QWidget.setTabOrder(own.previousInFocusChain(), self.kind)
+        before = own.previousInFocusChain()
+        if before:
+            QWidget.setTabOrder(before, self.kind)
 
     @property
     def fields(self) -> tuple[TextField, ...]:
