@@ -68,6 +68,10 @@ class Later(QObject):
         """Find out whether what the paper prints follows from its counts."""
         self._ask(self._checks, (outcome, choices))
 
+    def start(self, work: Callable[[], None]) -> None:
+        """Do something else in a thread of its own, which ``finish`` waits for as well."""
+        self._start(work)
+
     def close(self) -> None:
         """Answer nothing any more."""
         with self._lock:

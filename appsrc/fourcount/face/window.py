@@ -184,6 +184,11 @@ class MainWindow(QMainWindow):
         self.menus["forms"].triggered.connect(go.form_chosen)
         self._appearances.triggered.connect(see.take_appearance)
 
+    @property
+    def later(self) -> Later:
+        """The worker, for a window beside this one."""
+        return self._later
+
     # What is shown
 
     def _show_state(self, record: Record, findings: OutcomeFindings | None) -> None:
