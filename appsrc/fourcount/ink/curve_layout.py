@@ -132,7 +132,7 @@ class CurveLayout:
         pen.set_axes(box, across, up, self.view.ratios, self.px(SMALL), self.palette)
         self._draw_lines(pen)
         self._set_names(pen, names, box)
-        self._draw_points(pen)
+        self._draw_points(pen, box)
 
     # Text
 
@@ -212,15 +212,15 @@ class CurveLayout:
         reach, palette = self.curve.reach, self.palette
         for y in (1.0, self._odds()) if self.view.ratios else ():
             if y is not None:
-                pen.line([(0.0, y), (reach, y)], palette.outline, 1.2, NO_EFFECT)
+                pen.line([(0.0, y), (reach, y)], palette.outline, self.px(1.2), NO_EFFECT)
         if not self.view.ratios:
-            pen.line([(0.0, 0.0), (reach, reach)], palette.outline, 1.2, NO_EFFECT)
+            pen.line([(0.0, 0.0), (reach, reach)], palette.outline, self.px(1.2), NO_EFFECT)
         chosen = next(line for line in self.lines if self._chosen(line))
         self._draw_band(pen, chosen)
         for line in self.lines:
             if line is not chosen:
-                pen.line(self._drawn(line), palette.ink, 1.3, dash_of(line))
-        pen.line(self._drawn(chosen), palette.accent, 2.6, dash_of(chosen))
+                pen.line(self._drawn(line), palette.ink, self.px(1.3), dash_of(line))
+        pen.line(self._drawn(chosen), palette.accent, self.px(2.6), dash_of(chosen))
 
     def _draw_band(self, pen: Pen, line: CurveLine) -> None:
         """Filled where both limits are there, edged where one is."""
@@ -232,7 +232,7 @@ class CurveLayout:
         pen.area(rows, self.palette.accent, BAND)
         for edge in ([(p.start, p.low) for p in line.points], [(p.start, p.high) for p in line.points]):
             points = [(x, y) for x, y in edge if not isinstance(y, Gap) and self._fits(y)]
-            pen.line(points, self.palette.accent, 0.9)
+            pen.line(points, self.palette.accent, self.px(0.9))
 
     def _drawn(self, line: CurveLine) -> list[Value]:
         """The values of a line that are there; what is missing lies beyond its ends."""
@@ -271,12 +271,13 @@ class CurveLayout:
         places = [pen.where(*name.end) for name in names]
         heights = [tall * len(name.lines) + self.px(GAP / 2) for name in names]
         low, high = box[1] - 3 * tall, self.sheet.height - self.margin
-        middles = curve_axes.apart([y for _, y in places], heights, low, high)
+        # Of lines that end at the top, the one that ends first has the highest name: its leader then crosses no line.
+        wanted = [y + (box[2] - x) for x, y in places]
+        middles = curve_axes.apart(wanted, heights, low, high)
         left = box[2] + self.px(2.5 * GAP)
         for name, (x, y), middle in zip(names, places, middles, strict=True):
-            pen.stroke(
-                [(x + self.px(2), y), (box[2] + self.px(GAP), middle), (left - 3, middle)], self.palette.outline, 0.8
-            )
+            bend = (box[2] + self.px(GAP), middle)
+            pen.stroke([(x + self.px(2), y), bend, (left - self.px(3), middle)], self.palette.outline, self.px(0.8))
             self._put(pen, left, middle + tall * len(name.lines) / 2, name.lines, SMALL, name.colour, name.strong)
 
     # Points
@@ -294,27 +295,42 @@ class CurveLayout:
         chosen = next(line for line in self.lines if self._chosen(line))
         return next(point.value for point in chosen.points if point.start == mark.without)
 
-    def _draw_points(self, pen: Pen) -> None:
-        palette, tall = self.palette, self.px(SMALL) * LINE
-        taken: list[tuple[float, float, float]] = []
+    def _draw_points(self, pen: Pen, box: Box) -> None:
+        palette, shown = self.palette, []
         for mark, name in zip(self.curve.marks, self.words.marks, strict=True):
             y, (low, high) = self._value(mark), self._bar(mark)
             if isinstance(y, Gap) or not self._fits(y):
                 continue
             if not isinstance(low, Gap) and not isinstance(high, Gap):
-                pen.line([(mark.without, low), (mark.without, high)], palette.ink, 1.6)
+                pen.line([(mark.without, low), (mark.without, high)], palette.ink, self.px(1.6))
             own = mark.of_study and not mark.of_patient
             shape: Shape = "square" if mark.of_study else "round"
             pen.point(mark.without, y, shape, self.px(8), palette.page if own else palette.ink, palette.ink)
-            at = pen.where(mark.without, y)
-            beside = at[0] + self.px(GAP)
-            wide = pen.width(name, self.px(SMALL))
-            up = 1 if y > (1.0 if self.view.ratios else mark.without) else -1
-            middle = at[1] + up * tall
-            while any(abs(middle - y0) < tall and beside < x1 and beside + wide > x0 for x0, x1, y0 in taken):
-                middle += up * tall
-            taken.append((beside, beside + wide, middle))
-            pen.text(beside, middle, name, self.px(SMALL), palette.ink, ground=palette.page)
+            above = y > (1.0 if self.view.ratios else mark.without)
+            shown.append((pen.where(mark.without, y), name, 1 if above else -1))
+        reach = self.px(GAP)
+        taken: list[Box] = [(x - reach, y - reach, x + reach, y + reach) for (x, y), _, _ in shown]
+        for at, name, side in shown:
+            place = self._beside(pen, at, name, side, box, taken)
+            taken.append(place)
+            pen.text(place[0], (place[1] + place[3]) / 2, name, self.px(SMALL), palette.ink, ground=palette.page)
+
+    def _beside(self, pen: Pen, at: Value, name: str, side: int, box: Box, taken: list[Box]) -> Box:
+        """Room for the name of a point: beside it, on the side where no line goes on if that is free."""
+        tall, wide, gap = self.px(SMALL) * LINE, pen.width(name, self.px(SMALL)), self.px(GAP)
+        tried = []
+        for steps in (1.0, 2.2, 3.4, 4.6):
+            for way in (side, -side):
+                for left in (at[0] + gap, at[0] - gap - wide):
+                    middle = at[1] + way * steps * tall
+                    tried.append((left, middle - tall / 2, left + wide, middle + tall / 2))
+        inside = [one for one in tried if one[0] >= box[0] and one[1] > box[1] + 2 and one[2] <= box[2] + gap]
+        free = [one for one in inside if not any(_meet(one, other) for other in taken)]
+        return (free or inside or tried)[0]
+
+
+def _meet(one: Box, other: Box) -> bool:
+    return one[0] < other[2] and other[0] < one[2] and one[1] < other[3] and other[1] < one[3]
 
 
 def dash_of(line: CurveLine) -> Dash:

@@ -40,11 +40,16 @@ LEFT_OUT = "Not drawn: the {name}, which gives no line."
 NOTHING = "No effect of this table can be carried to another starting risk, so there is nothing to draw."
 AT_START = "At a starting {risk} of {start}"
 STUDY_OWN = ", the study’s own"
-KEPT = "{value} with the {name} kept constant"
+KEPT = "{value} with the {name}{kept}"
+KEPT_CONSTANT = " kept constant"
+WHICHEVER = "{value}, whichever effect is kept constant"
 CONVERTED = "the {name} is a {ratio} of {value}"
-PASSES = "with the {name} the {risk} would pass 100%"
-FALLS = "with the {name} the {risk} would fall below 0%"
-UNDETERMINED = "not given"
+GONE = {
+    "beyond-one": "with the {name} the {risk} would pass 100%",
+    "carried-beyond-zero": "with the {name} the {risk} would fall below 0%",
+}
+UNDETERMINED = "nothing follows from the {name}"
+NOT_GIVEN = "not given"
 
 
 class View(NamedTuple):
@@ -189,20 +194,31 @@ def _start(mark: CurveMark) -> str:
 
 
 def _at(outcome: Outcome, curve: Curve, view: View, mark: CurveMark) -> str:
-    """``At a starting risk of 12%: 6.5% with the risk ratio kept constant, 6.3% with the odds ratio kept constant.``"""
+    """``At a starting risk of 12%: 6.5% with the risk ratio kept constant, 6.3% with the odds ratio.``"""
     risk, own = names.risk_name(outcome), STUDY_OWN if mark.of_study else ""
-    parts = []
-    for line in shown_lines(curve, view):
-        name, value = carriable_name(outcome, line.effect), _point(line, mark.without).value
-        if isinstance(value, Gap):
-            pattern = {"beyond-one": PASSES, "carried-beyond-zero": FALLS}.get(value.key)
-            parts.append(pattern.format(name=name, risk=risk) if pattern else f"{name}: {UNDETERMINED}")
-        elif view.ratios:
-            ratio = names.effect_name(outcome, "risk_ratio")
-            parts.append(CONVERTED.format(name=name, ratio=ratio, value=numbers.ratio(value)))
-        else:
-            parts.append(KEPT.format(value=numbers.percent(value), name=name))
+    lines = shown_lines(curve, view)
+    found = [(carriable_name(outcome, line.effect), _point(line, mark.without).value) for line in lines]
+    given = [(name, numbers.percent(value)) for name, value in found if not isinstance(value, Gap)]
+    if view.ratios:
+        ratio = names.effect_name(outcome, "risk_ratio")
+        parts = [CONVERTED.format(name=name, ratio=ratio, value=_written(value)) for name, value in found]
+    elif len(given) == len(found) > 1 and len({text for _, text in given}) == 1:
+        parts = [WHICHEVER.format(value=given[0][1])]
+    else:
+        parts = [
+            KEPT.format(value=text, name=name, kept="" if place else KEPT_CONSTANT)
+            for place, (name, text) in enumerate(given)
+        ]
+        parts += [
+            GONE.get(value.key, UNDETERMINED).format(name=name, risk=risk)
+            for name, value in found
+            if isinstance(value, Gap)
+        ]
     return f"{AT_START.format(risk=risk, start=_start(mark))}{own}: {', '.join(parts)}."
+
+
+def _written(value: float | Gap) -> str:
+    return NOT_GIVEN if isinstance(value, Gap) else numbers.ratio(value)
 
 
 def _notes(outcome: Outcome, findings: OutcomeFindings, choices: Choices, curve: Curve, view: View) -> tuple[str, ...]:
@@ -251,14 +267,14 @@ def _point(line: CurveLine, start: float) -> CurvePoint:
 def _cell(point: CurvePoint, ratios: bool) -> str:
     """``6.5% (4.4 to 9.4%)``."""
     if isinstance(point.value, Gap):
-        return limits.WITHHELD_ENDS.get(point.value.key, UNDETERMINED)
+        return limits.WITHHELD_ENDS.get(point.value.key, NOT_GIVEN)
     write = numbers.ratio if ratios else numbers.percent
     if isinstance(point.low, Gap) and isinstance(point.high, Gap):
         return write(point.value)
     ends = []
     for end, sign in ((point.low, ""), (point.high, "%")):
         if isinstance(end, Gap):
-            ends.append(limits.WITHHELD_ENDS.get(end.key, UNDETERMINED))
+            ends.append(limits.WITHHELD_ENDS.get(end.key, NOT_GIVEN))
         elif ratios:
             ends.append(numbers.ratio_limit(end, point.value))
         else:
