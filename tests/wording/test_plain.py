@@ -1,0 +1,277 @@
+"""Plain words for a patient: the present tense, both frames, one order, certainty as rated, easy to read."""
+
+from __future__ import annotations
+
+import re
+from collections.abc import Callable
+
+import pytest
+from msgspec.structs import replace
+
+from fourcount.appraisal.findings import OutcomeFindings, PatientFindings
+from fourcount.record.outcome import CERTAINTIES, Outcome, Patient
+from fourcount.wording import plain_texts
+from fourcount.wording.plain import negated, plain_hint, present
+from fourcount.wording.plain_outcome import PlainWords, plain_risks, plain_words, why_not
+from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, SHOWN, SMALL, TRIAL, WELCOME
+
+FindingsOf = Callable[[Outcome], OutcomeFindings]
+
+
+@pytest.fixture
+def say(findings_of: FindingsOf) -> Callable[..., PlainWords]:
+    """The words of an outcome, of 100 people unless told otherwise."""
+
+    def words(outcome: Outcome, people: int = 100) -> PlainWords:
+        patient = findings_of(outcome).patient
+        assert isinstance(patient, PatientFindings)
+        risks = plain_risks(patient, outcome.welcome)
+        assert risks is not None
+        return plain_words(outcome, patient, risks, people)
+
+    return words
+
+
+@pytest.mark.parametrize(
+    ("typed", "said"),
+    [
+        ("fell at least once", "fall at least once"),
+        ("was readmitted", "are readmitted"),
+        ("Died within 30 days", "die within 30 days"),
+        ("did not fall or die", "do not fall or die"),
+        ("developed pneumonia, died or were readmitted", "develop pneumonia, die or are readmitted"),
+        ("had a stroke or heart attack", "have a stroke or heart attack"),
+        ("had no falls", "have no falls"),
+        ("had been admitted", "had been admitted"),
+        ("fell and limped", "fell and limped"),
+        ("転倒した", "転倒した"),
+        ("", ""),
+    ],
+)
+def test_the_past_is_said_in_the_present(typed: str, said: str) -> None:
+    """Known verbs are turned, in every part of a phrase; a phrase with an unknown one stays whole as typed."""
+    assert present(typed) == said
+
+
+@pytest.mark.parametrize(
+    ("said", "lack"),
+    [
+        ("fall at least once", "do not fall at least once"),
+        ("are readmitted", "are not readmitted"),
+        ("do not heal", "heal"),
+        ("have no falls", "have falls"),
+        ("die or are readmitted", ""),
+        ("転倒した", ""),
+    ],
+)
+def test_the_lack_is_said_only_where_it_is_plain(said: str, lack: str) -> None:
+    """A known verb is negated; a phrase of several parts or without a known verb is not."""
+    assert negated(said) == lack
+
+
+def test_words_typed_for_patients_go_first(say: Callable[..., PlainWords]) -> None:
+    """What the reader typed for patients is said as it is, in each column's place."""
+    words = say(replace(TRIAL, plain_event_text="trip over", plain_other_text="stay on their feet"))
+    assert (words.event, words.other) == ("trip over", "stay on their feet")
+    turned = replace(WELCOME, plain_event_text="get well", plain_other_text="stay ill")
+    assert (say(turned).event, say(turned).other) == ("stay ill", "get well")
+
+
+def test_a_column_without_a_name_is_said_by_the_other_one() -> None:
+    """The hint of an unnamed column is the lack of the named one."""
+    bare = replace(TRIAL, right_words_text="", right_heading_text="", left_heading_text="")
+    assert plain_hint(bare, "right") == "do not fall at least once"
+    assert plain_hint(bare, "left") == "fall at least once"
+
+
+def test_the_page_says_first_both_risks_then_the_difference(say: Callable[..., PlainWords]) -> None:
+    """The absolute risks in both frames, the difference, and that nobody knows which people, in this order."""
+    sentence = say(AT_TWELVE).sentence
+    order = ["12 in 100", "88 in 100 do not fall", "6 in 100", "94 in 100 do not fall", "6 fewer of these 100", "which"]
+    places = [sentence.index(part) for part in order]
+    assert places == sorted(places)
+    assert "Falls in 12 months" in sentence
+
+
+def test_the_people_shown_are_those_at_this_starting_risk(say: Callable[..., PlainWords]) -> None:
+    """They are like the study's only where the starting risk is the study's own."""
+    assert say(TRIAL).lead == "These people are like those in the study."
+    assert say(AT_TWELVE).lead == "These people start at a risk of 12 in 100."
+
+
+def test_a_welcome_outcome_is_turned_to_its_complement(say: Callable[..., PlainWords]) -> None:
+    """The unwelcome side is counted: 45 and 60 of 100 who heal are 55 and 40 who do not."""
+    words = say(WELCOME)
+    assert words.without.number == "55 in 100"
+    assert words.with_.number == "40 in 100"
+    assert words.with_.other == "60 in 100 heal"
+    assert words.summary == "On balance, 15 fewer of these 100 do not heal."
+    assert words.turned == "The filled figures are people who do not heal."
+
+
+@pytest.mark.parametrize("outcome", [TRIAL, HARM, SMALL], ids=["fewer", "more", "small"])
+def test_counting_the_welcome_side_shows_the_same_page(outcome: Outcome, say: Callable[..., PlainWords]) -> None:
+    """Whichever column the record counts, a patient sees the same people."""
+    other = replace(outcome, counted="right")
+    one, two = say(outcome, 1_000), say(other, 1_000)
+    assert (one.without, one.with_, one.summary) == (two.without, two.with_, two.summary)
+
+
+def test_a_turned_range_keeps_its_ends_in_order(say: Callable[..., PlainWords], findings_of: FindingsOf) -> None:
+    """The limits of the complement are the complements of the limits, the other way round."""
+    patient = findings_of(WELCOME).patient
+    assert isinstance(patient, PatientFindings)
+    plain, turned = plain_risks(patient, False), plain_risks(patient, True)
+    assert plain
+    assert turned
+    assert turned.with_ends == pytest.approx((1 - plain.with_ends[1], 1 - plain.with_ends[0]))
+    assert turned.apart == pytest.approx((-plain.apart[1], -plain.apart[0]))
+
+
+def test_the_relative_figure_names_both_absolute_ones(say: Callable[..., PlainWords]) -> None:
+    """ "46% lower" never stands without the two risks in the same sentence, and rounding is owned up to."""
+    relative = say(AT_TWELVE).relative
+    assert relative.startswith("Going from 12 to 6 in 100 is also called “46% lower”.")
+    assert "before rounding" in relative
+    assert "before rounding" not in say(HARM).relative
+    assert relative not in say(AT_TWELVE).sentence
+
+
+@pytest.mark.parametrize("certainty", CERTAINTIES)
+@pytest.mark.parametrize("outcome", [TRIAL, HARM], ids=["fewer", "more"])
+def test_certainty_is_said_as_it_was_rated(certainty: str, outcome: Outcome, say: Callable[..., PlainWords]) -> None:
+    """Never silence: the rating in words, with the verb that goes with it, or that nobody rated it."""
+    said = say(replace(outcome, certainty=certainty)).certainty
+    verbs = {"": "not rated", "high": "high", "moderate": "probably", "low": "may", "very-low": "very uncertain"}
+    assert verbs[certainty] in said
+    assert said in say(replace(outcome, certainty=certainty)).sentence
+
+
+def test_no_difference_is_left_open_where_the_interval_holds_it(say: Callable[..., PlainWords]) -> None:
+    """An interval through no effect is said in plain words; one beside it is not."""
+    assert say(SMALL, 1_000).open_ == plain_texts.OPEN
+    assert say(TRIAL).open_ == ""
+
+
+def test_a_study_without_chance_says_so(say: Callable[..., PlainWords]) -> None:
+    """Outside trials the page says that other things may explain the difference, and nothing is "avoided"."""
+    words = say(CASE_CONTROL)
+    assert "chance did not decide" in words.study
+    assert words.avoided == "fewer, on balance"
+    assert say(TRIAL).study == ""
+
+
+@pytest.mark.parametrize("name", SHOWN)
+def test_every_kind_of_outcome_can_be_shown(name: str, findings_of: FindingsOf) -> None:
+    """Nothing is missing from a whole outcome, whatever its form."""
+    assert why_not(SHOWN[name], findings_of(SHOWN[name])) == ""
+
+
+@pytest.mark.parametrize(
+    ("changes", "item"),
+    [
+        ({"span_text": ""}, "the time span"),
+        ({"first_label_text": " "}, "the name of the index group"),
+        ({"second_label_text": ""}, "the name of the reference group"),
+        ({"left_words_text": "", "left_heading_text": ""}, "the event in words"),
+    ],
+)
+def test_what_is_missing_is_named(changes: dict[str, str], item: str, findings_of: FindingsOf) -> None:
+    """Without outcome, groups or time span nothing is shown, and the sentence names what to fill in."""
+    outcome = replace(TRIAL, **changes)
+    why = why_not(outcome, findings_of(outcome))
+    assert why == f"Before a patient is shown this, fill in {item}."
+
+
+def test_plain_words_stand_in_for_the_event(findings_of: FindingsOf) -> None:
+    """An event that is only named for patients is named."""
+    outcome = replace(TRIAL, left_words_text="", left_heading_text="", plain_event_text="fall")
+    assert why_not(outcome, findings_of(outcome)) == ""
+
+
+def test_a_welcome_outcome_needs_words_for_the_others(findings_of: FindingsOf) -> None:
+    """Where the drawn side has no words and none follow from the other's, they are asked for."""
+    outcome = replace(WELCOME, left_words_text="転倒した", right_words_text="")
+    assert plain_texts.OTHER_OUTCOME in why_not(outcome, findings_of(outcome))
+
+
+def test_a_case_control_study_without_a_starting_risk_is_refused(findings_of: FindingsOf) -> None:
+    """No risks, no page; the sentence asks for the starting risk."""
+    outcome = replace(CASE_CONTROL, patient=Patient())
+    assert "starting risk" in why_not(outcome, findings_of(outcome))
+
+
+BANNED = r"\b(NNT\w*|odds|ratio|intervals?|CI|p ?[<=]|significant\w*|hazard|95%|common|rare|likely|unlikely)\b"
+ONE_IN = re.compile(r"\b1 in (?!1(?:,?0)+\b)\d")
+
+
+@pytest.mark.parametrize("name", [name for name in SHOWN if name != "tiny"])
+@pytest.mark.parametrize("certainty", CERTAINTIES)
+def test_a_patient_hears_no_statistics(name: str, certainty: str, say: Callable[..., PlainWords]) -> None:
+    """No number needed, no odds, no interval, no p, no lone word for a risk, no 1-in-X."""
+    words = say(replace(SHOWN[name], certainty=certainty), 1_000)
+    said = " ".join((words.sentence, words.relative, words.range_, *words.other_starts))
+    assert not re.search(BANNED, said)
+    assert not ONE_IN.search(said)
+
+
+def syllables(word: str) -> int:
+    """Groups of vowels, less a silent e at the end; a figure counts as one, as it is read at a glance."""
+    if not word.isalpha():
+        return 1
+    groups = len(re.findall(r"[aeiouy]+", word.lower()))
+    silent = word.lower().endswith("e") and not word.lower().endswith("le")
+    return max(groups - silent, 1)
+
+
+def reading_grade(text: str) -> float:
+    """Grade level of Flesch and Kincaid: 0.39 words a sentence + 11.8 syllables a word - 15.59.
+
+    Kincaid, Fishburne, Rogers and Chissom 1975, Derivation of new readability formulas for Navy enlisted personnel.
+    """
+    sentences = [part for part in re.split(r"[.:!?](?:\s|$)", text) if part.strip()]
+    words = re.findall(r"[A-Za-z]+|\d[\d,.]*\d|\d", text)
+    return 0.39 * len(words) / len(sentences) + 11.8 * sum(map(syllables, words)) / len(words) - 15.59
+
+
+def test_the_formula_knows_easy_from_hard() -> None:
+    """A child's sentence is below the first grade, one of a methods section far above the twelfth."""
+    assert reading_grade("The cat sat on the mat. It was fat.") < 1
+    assert reading_grade("Heterogeneity of methodological characteristics necessitates multivariable adjustment.") > 20
+
+
+@pytest.mark.parametrize("name", ["trial", "at twelve", "harm", "welcome", "small", "hazard", "case-control"])
+@pytest.mark.parametrize("certainty", CERTAINTIES)
+def test_a_page_reads_at_about_the_sixth_grade(name: str, certainty: str, say: Callable[..., PlainWords]) -> None:
+    """All that a page says together is at most a little above the sixth grade by Flesch and Kincaid's formula."""
+    words = say(replace(SHOWN[name], certainty=certainty), 1_000)
+    assert reading_grade(f"{words.sentence} {words.relative}") < 7
+
+
+def test_low_and_high_starting_risks_are_said(say: Callable[..., PlainWords]) -> None:
+    """Three starting risks give the usual one's page and a sentence for each of the others."""
+    three = Patient(start_kind="three", low_risk_text="6%", starting_risk_text="12%", high_risk_text="24%")
+    words = say(replace(TRIAL, patient=three))
+    assert words.without.number == "12 in 100"
+    assert [line[:9] for line in words.other_starts] == ["If 6 in 1", "If 24 in "]
+
+
+def test_another_span_is_said_in_the_title(say: Callable[..., PlainWords]) -> None:
+    """Risks carried to another time say that time, and that this is an assumption."""
+    words = say(replace(AT_TWELVE, patient=Patient(starting_risk_text="12%", other_span_text="2 years")))
+    assert words.title == "Falls in 2 years"
+    assert plain_texts.OTHER_SPAN in words.study
+
+
+def test_no_difference_is_said_without_a_direction(say: Callable[..., PlainWords]) -> None:
+    """Equal risks: the same number, nothing avoided or added, no relative figure."""
+    equal = replace(TRIAL, table=replace(TRIAL.table, second_left_text="38", second_right_text="374"))
+    words = say(equal)
+    assert words.summary == "There is no difference: the same number of these 100 fall at least once."
+    assert (words.avoided, words.added, words.relative) == ("", "", "")
+
+
+def test_a_hazard_ratio_alone_gives_people(say: Callable[..., PlainWords]) -> None:
+    """A printed hazard ratio at a typed risk: 1 - 0.8 to the power of 0.72 is 14.8%."""
+    words = say(HAZARD)
+    assert (words.without.number, words.with_.number) == ("20 in 100", "15 in 100")
