@@ -8,10 +8,11 @@ import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
-from fourcount.appraisal.findings import Figure, Gap, Interval, NumberNeeded, NumberNeededRange, Range
-from fourcount.appraisal.gating import SUPPORT
-from fourcount.appraisal.patient import carry
-from fourcount.appraisal.starting_risk import StartingRisk
+from fourcount.appraisal.carrying.carry import for_a_patient
+from fourcount.appraisal.carrying.study import Study
+from fourcount.appraisal.findings import Carriable, Figure, Gap, Interval, NumberNeeded, NumberNeededRange, Range
+from fourcount.record.entry.starts import read_start
+from fourcount.record.outcome import Outcome, Patient
 from fourcount.record.paper import FAMILIES
 
 TABLE = (38, 374, 70, 339)
@@ -20,8 +21,9 @@ TABLE = (38, 374, 70, 339)
 def at(baseline, effect, estimate, low, high, welcome=False):
     """The patient's findings of a bare effect in a trial."""
     figure = Figure(estimate=estimate, interval=Interval(low=low, high=high), method="katz")
-    start = StartingRisk(value=baseline, origin="given")
-    return carry({effect: figure}, start, effect, SUPPORT["trial"], welcome=welcome)
+    one = Carriable(effect=effect, measure=effect, figure=figure)
+    study = Study(outcome=Outcome(left_welcome=welcome), carriable=(one,))
+    return for_a_patient(study, read_start(Patient(starting_risk_text=f"{100 * baseline}%"))).patient
 
 
 # Cochrane Handbook 5.1, 12.5.4.2 and 12.5.4.3: a risk ratio of 0.92 and an odds ratio of 0.73 at 30%.

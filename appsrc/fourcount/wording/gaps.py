@@ -101,6 +101,22 @@ GAP_TEXTS = {
     "so its totals give neither risks nor what follows from them.",
     "case-control-needs-baseline": "Type a starting risk from another source: a case-control study has none.",
     "no-starting-risk": "Type a starting risk: nobody is in the reference group to give one.",
+    "pairs-need-baseline": "Type a starting risk, or the pairs that agree: those that differ do not give one.",
+    "rates-need-baseline": "Type a starting risk, or a rate and the time: person-time itself gives no risk.",
+    "rate-not-typed": "Type a rate, such as 12 per 1,000 person-years.",
+    "rate-unreadable": "The rate cannot be read; 12 per 1,000 person-years would do.",
+    "rate-needs-span": "Type the study’s time span, such as 12 months: a rate gives a risk only over a time.",
+    "overall-not-typed": "Type the risk of all people together, and the share of them who have the exposure.",
+    "overall-unreadable": "The overall risk or the share exposed cannot be read; 12% and 30% would do.",
+    "span-unreadable": "The other time span cannot be read; 5 years would do.",
+    "other-span-needs-study-span": "Type the study’s own time span, such as 12 months: only from it can risks be "
+    "carried to another one.",
+    "other-span-survey": "A cross-sectional survey looks at one moment, so its risks belong to no time span and cannot "
+    "be carried to another one.",
+    "other-span-varied": "People were followed for different times, so no other time span follows from raw counts; "
+    "a printed risk at one time can be carried.",
+    "other-span-pairs": "Over another time span this has no interval: both sides are the same people, and the limits "
+    "of the two risks alone do not tell it.",
     "baseline-unreadable": "The starting risk cannot be read; 12% or 12 in 100 would do.",
     "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
     "undetermined-at-baseline": "An infinite effect says nothing at a starting risk of 0%, nor an odds ratio of 0 "

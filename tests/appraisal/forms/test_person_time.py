@@ -30,7 +30,7 @@ def test_person_time_gives_rates():
     estimates = [findings.measures[key].estimate for key in RATE_MEASURES]
     assert estimates == pytest.approx([38 / 4120, 70 / 4090, 38 / 4120 - 70 / 4090, 38 * 4090 / (70 * 4120)])
     assert Gap("not-counts") == findings.counts
-    assert Gap("carried-later") == findings.patient
+    assert Gap("rates-need-baseline") == findings.patient
     assert findings.test.method == "rate-score"
 
 

@@ -2,14 +2,13 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+import msgspec
 
 from fourcount.appraisal.findings import Carriable, Figure, Gap
 from fourcount.record.outcome import Outcome
 
 
-@dataclass(frozen=True, kw_only=True, slots=True)
-class OwnRisks:
+class OwnRisks(msgspec.Struct, frozen=True, kw_only=True):
     """Both groups' risks, with their difference and ratio, each with the study's direct interval at one level.
 
     ``related`` says that both sides are the same people, so that no interval follows from those of the two risks.
@@ -23,8 +22,7 @@ class OwnRisks:
     related: bool = False
 
 
-@dataclass(frozen=True, kw_only=True, slots=True)
-class Study:
+class Study(msgspec.Struct, frozen=True, kw_only=True):
     """One outcome's effects and risks, and what its design refuses.
 
     ``own`` is None where the form or the design has no risks of people; ``needs`` is then the key of the reason why a

@@ -38,10 +38,10 @@ from fourcount.stats.results import Counts, Fact, Gap, Interval, PairCounts, Rat
 
 __all__ = [
     "EFFECT_MEASURES", "GAP_KEYS", "MEASURES", "PAIR_MEASURES", "POOLED_MEASURES", "RATE_MEASURES",
-    "TIMED_MEASURES", "AnyNumberNeeded", "Carriable", "CarriedEffect", "Caution", "CheckFindings", "Clusters", "Conversion", "Counts", "EValues",
-    "Extras", "Fact", "Figure", "FigureCheck", "Finding", "Fit", "Fragility", "Gap", "Given", "Homogeneity",
-    "Interaction", "Interval", "Kind", "LossScenario", "Losses", "Mark", "Match", "NumberNeeded",
-    "NumberNeededLimit", "NumberNeededRange", "Orientation", "OutcomeFindings", "OwnLine", "PairCounts", "PatientFindings",
-    "PrintedFigure", "Probability", "Range", "Rates", "Recovered", "StrataFindings", "StratumFindings",
-    "TimedRisks", "Totals",
+    "TIMED_MEASURES", "AnyNumberNeeded", "Carriable", "CarriedEffect", "Caution", "CheckFindings", "Clusters",
+    "Conversion", "Counts", "EValues", "Extras", "Fact", "Figure", "FigureCheck", "Finding", "Fit", "Fragility",
+    "Gap", "Given", "Homogeneity", "Interaction", "Interval", "Kind", "LossScenario", "Losses", "Mark", "Match",
+    "NumberNeeded", "NumberNeededLimit", "NumberNeededRange", "Orientation", "OutcomeFindings", "OwnLine",
+    "PairCounts", "PatientFindings", "PrintedFigure", "Probability", "Range", "Rates", "Recovered",
+    "StrataFindings", "StratumFindings", "TimedRisks", "Totals",
 ]  # fmt: skip

@@ -76,6 +76,18 @@ GAP_KEYS = (
     "design-case-control",  # a case-control study gives no risk: its totals are those of cases and controls
     "case-control-needs-baseline",  # without an outside starting risk a case-control study says nothing of a patient
     "no-starting-risk",  # nothing typed, and the reference group has nobody
+    "pairs-need-baseline",  # pairs that differ alone hold no starting risk
+    "rates-need-baseline",  # a rate is no risk until a time is set
+    "rate-not-typed",  # the starting risk is to come from a rate, and none is typed
+    "rate-unreadable",  # or it cannot be read
+    "rate-needs-span",  # a rate gives a risk over a time, and no time span is known
+    "overall-not-typed",  # the starting risk is to be solved from an overall risk, and a part is missing
+    "overall-unreadable",  # or a part cannot be read
+    "span-unreadable",  # the other time span gives no time
+    "other-span-needs-study-span",  # another time span, and the study's own is not known as a time
+    "other-span-survey",  # a survey looks at one moment
+    "other-span-varied",  # people were followed for different times, so their risks belong to none
+    "other-span-pairs",  # of the same people, no interval follows from those of two risks
     "baseline-unreadable",  # the typed starting risk gives no risk
     "carried-gap",  # the effect to carry has no value
     "bare-starting-risk",  # the starting risk is a bare value without an interval of its own

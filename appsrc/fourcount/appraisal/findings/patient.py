@@ -55,9 +55,10 @@ class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
     effect's method.
 
     ``start_from`` says where the starting risk comes from, ``start_interval`` its own limits. ``study_span`` and
-    ``other_span`` are the study's time span and the one carried to, where another was asked for. ``rank`` is "low",
-    "usual" or "high" of three starting risks; ``others`` then holds the low and the high one's findings, the usual
-    one's being these; a Gap stands where one cannot be given. ``level`` is that of all intervals here but a typed start's.
+    ``other_span`` are the study's time span and the one carried to, where another was asked for; ``baseline`` is the
+    starting risk over the study's. ``rank`` is "low", "usual" or "high" of three starting risks; the usual one's
+    findings hold those of the low and the high one, a Gap where one cannot be given. ``level`` is that of all
+    intervals here but typed limits of the starting risk.
     """
 
     baseline: float
