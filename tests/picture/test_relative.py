@@ -22,10 +22,10 @@ def test_an_increase_makes_the_other_bar_full() -> None:
     assert relative_plan(plan(0.06, 0.12)) == RelativePlan(sounds=(0.5, 1.0), people=(0.06, 0.12))
 
 
-@pytest.mark.parametrize("with_", [0.0, 0.3])
-def test_nobody_affected_without_gives_no_relative_figure(with_: float) -> None:
-    """0 against 30% has no ratio, and 0 against 0 has none: nothing is drawn in its place."""
-    assert relative_plan(plan(0.0, with_)) is None
+@pytest.mark.parametrize(("without", "with_"), [(0.0, 0.0), (0.0, 0.3), (5e-324, 0.3)])
+def test_nobody_affected_without_gives_no_relative_figure(without: float, with_: float) -> None:
+    """0 against 30% has no ratio that is a number, and 0 against 0 has none: nothing is drawn in its place."""
+    assert relative_plan(plan(without, with_)) is None
 
 
 @given(SOME, st.floats(0, 1))

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from dataclasses import dataclass
+from math import isinf
 
 from fourcount.picture.plan import Plan
 
@@ -20,9 +21,9 @@ class RelativePlan:
 
 
 def relative_plan(plan: Plan) -> RelativePlan | None:
-    """Both pairs, without before with; None where there is no relative figure, since nobody is affected without."""
+    """Both pairs, without before with; None where there is no relative figure: nobody, or next to nobody, without."""
     without, with_ = plan.without_risk, plan.with_risk
-    if not without:
+    if not without or isinf(with_ / without):
         return None
     most = max(without, with_)
     return RelativePlan(sounds=(without / most, with_ / most), people=(without, with_))
