@@ -82,6 +82,8 @@ CHANGED: list[tuple[str, Callable[[Tree], None], dict[str, Any]]] = [
     ),
     ("character", put("title_text", "a\u202eb"), {"place": "title_text", "character": "U+202E"}),
     ("character", put("title_text", "a\x00b"), {"place": "title_text", "character": "U+0000"}),
+    ("character", put("outcomes", 0, "design", "\ud800"), {"place": "outcomes.0.design", "character": "U+D800"}),
+    ("character", put("outcomes", 0, "a\udfff", "x"), {"place": "outcomes.0", "character": "U+DFFF"}),
     (
         "character",
         put("outcomes", 0, "patient", "rate_text", "\ud800"),
@@ -148,7 +150,7 @@ def test_any_bytes_get_an_answer(data: bytes) -> None:
     assert isinstance(decode(data), Record | Refused)
 
 
-PIECES = (b"", b'"', b"{", b"]", b"\\", b"\xff", b"0", b",")
+PIECES = (b"", b'"', b"{", b"]", b"\\", b"\xff", b"0", b",", b"\\ud800", b"\\u0000", b"\x00", b"null", b"1e9")
 
 
 @given(st.data())
@@ -168,12 +170,11 @@ def test_a_file_with_a_few_bytes_changed_gets_an_answer(data: st.DataObject) -> 
         assert decode(kept) == found
 
 
+ANY = st.text(st.characters(exclude_categories=()), max_size=5)
 NAMES = st.sampled_from(("outcomes", "choices", "title_text", *Outcome.__struct_fields__))
 JSON = st.recursive(
-    st.none() | st.booleans() | st.integers() | st.floats() | st.text(max_size=5),
-    lambda below: (
-        st.lists(below, max_size=3) | st.dictionaries(st.sampled_from(Outcome.__struct_fields__), below, max_size=3)
-    ),
+    st.none() | st.booleans() | st.integers() | st.floats() | ANY,
+    lambda below: st.lists(below, max_size=3) | st.dictionaries(NAMES | ANY, below, max_size=3),
     max_leaves=6,
 )
 

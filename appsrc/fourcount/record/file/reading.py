@@ -20,6 +20,8 @@ LONGEST_NUMBER = 40
 
 _BYTE_ORDER_MARK = b"\xef\xbb\xbf"
 _OPENS_OR_CLOSES = re.compile(r'"(?:[^"\\]|\\.)*+"?|(?P<open>[\[{])|(?P<close>[\]}])', re.DOTALL)
+_HALF = re.compile("[\ud800-\udfff]")
+"""Half of a character, which JSON can escape and UTF-8 cannot write, so that no type could be asked about it."""
 
 Tree = dict[str, Any]
 
@@ -86,6 +88,8 @@ def _with_single_keys(pairs: _Pairs, place: Place) -> Tree | Refused:
     """The object as a dictionary; Refused where a key stands twice, or where a number is none, in it or below it."""
     tree: Tree = {}
     for key, value in pairs:
+        if half := _HALF.search(key):
+            return _half(half, place)
         if key in tree:
             return Refused("key-twice", {"place": at(place), "name": specimen(key)})
         plain = _plain(value, (*place, key))
@@ -95,7 +99,13 @@ def _with_single_keys(pairs: _Pairs, place: Place) -> Tree | Refused:
     return tree
 
 
+def _half(half: re.Match[str], place: Place) -> Refused:
+    return Refused("character", {"place": at(place), "character": f"U+{ord(half[0]):04X}"})
+
+
 def _plain(value: Any, place: Place) -> Any:
+    if isinstance(value, str) and (half := _HALF.search(value)):
+        return _half(half, place)
     if isinstance(value, _Pairs):
         return _with_single_keys(value, place)
     if isinstance(value, _NoNumber):
