@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Callable
+from itertools import product
 
 import pytest
 from PySide6.QtGui import QColor, QImage
@@ -72,6 +73,26 @@ def test_a_picture_keeps_to_a_height(
     assert height <= within
     rows = 10 * TALL[icons]  # one pixel more a cell would have made the array so much higher, gap and all
     assert height == it.height(look, 800) or height > within - rows - 6
+
+
+ODD = [0.0, 5e-324, 1e-12, 0.00005, 0.004, 0.5, 0.50001, 0.99995, 1 - 1e-12, 1.0]
+
+
+@pytest.mark.parametrize("arrangement", ARRANGEMENTS)
+@pytest.mark.parametrize("width", [1, 30, 360])
+def test_any_two_risks_can_be_drawn(
+    sheet: Callable[..., object],
+    style: Callable[..., object],
+    picture: Callable[..., Picture],
+    arrangement: Arrangement,
+    width: int,
+) -> None:
+    """However small, close or certain the risks are, and however narrow the place, the height drawn is the one told."""
+    look, options = style(), PictureOptions(arrangement=arrangement)
+    for without, with_ in product(ODD, ODD):
+        it = picture(without, with_, limits=(with_ / 2, (1 + with_) / 2), options=options)
+        with sheet(max(width, 1), 10, LIGHT.page) as (_, painter):
+            assert round(it.draw(painter, look, 0, 0, width)) == it.height(look, width)
 
 
 def test_what_cannot_be_made_smaller_stays(style: Callable[..., object], picture: Callable[..., Picture]) -> None:
