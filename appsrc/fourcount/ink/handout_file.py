@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable
 from pathlib import PurePath
 
-from PySide6.QtCore import QBuffer, QIODevice, QMarginsF, QRectF, QSize, QSizeF
+from PySide6.QtCore import QBuffer, QIODevice, QMarginsF, QRectF, QSize, QSizeF, Qt
 from PySide6.QtGui import QImage, QPageLayout, QPageSize, QPainter, QPdfWriter
 
 from fourcount.ink.handout import Handout, Paper
@@ -70,6 +70,7 @@ def page_image(page: Handout, dots: float) -> QImage:
     width, height = page.size
     scale = dots / 96
     image = QImage(QSizeF(width * scale, height * scale).toSize(), QImage.Format.Format_RGB32)
+    image.fill(Qt.GlobalColor.white)  # the last row and column are not whole units
     image.setDevicePixelRatio(scale)
     per_metre = round(dots / 0.0254)
     image.setDotsPerMeterX(per_metre)

@@ -1,0 +1,126 @@
+"""The patient's page fills its room, never with text smaller than the window's, and says everything."""
+
+from __future__ import annotations
+
+import pytest
+from PySide6.QtGui import QColor, QImage, QPainter
+
+from fourcount.appraisal.appraise import appraise
+from fourcount.ink.palette import PAPER, contrast
+from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
+from fourcount.ink.patient_page import PatientPage
+from fourcount.ink.plain_picture import Shown, shown
+from fourcount.picture.options import USUAL
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Choices
+from patient_outcomes import AT_TWELVE, CASE_CONTROL, HAZARD, LONG, SHOWN, TINY, TRIAL, WELCOME
+
+ROOMS = [(1280, 740), (1024, 640), (800, 560), (1920, 1020), (480, 360)]
+
+
+def ready(outcome: Outcome, uncertainty: bool = False) -> Shown:
+    """An outcome ready to be drawn."""
+    it = shown(outcome, appraise(outcome, Choices()), USUAL._replace(uncertainty=uncertainty))
+    assert it is not None
+    return it
+
+
+def drawn(outcome: Outcome, room: tuple[int, int], zoom: float = 1.0, below: int = 40) -> tuple[QImage, int]:
+    """The page painted with white space below, and its height."""
+    page, (width, height) = PatientPage(ready(outcome)), room
+    style = page.style(width, height, zoom)
+    tall = max(height, round(page.least_height(style, width)))
+    image = QImage(width, tall + below, QImage.Format.Format_RGB32)
+    image.fill(QColor("#FFFFFF"))
+    painter = QPainter(image)
+    page.draw(painter, style, width, tall)
+    painter.end()
+    return image, tall
+
+
+def last_row(image: QImage) -> int:
+    """The lowest row that holds anything but white."""
+    blank = bytes(QImage(image.width(), 1, image.format()).constBits()) and b"\xff" * image.bytesPerLine()
+    return max(y for y in range(image.height()) if bytes(image.constScanLine(y)) != blank)
+
+
+@pytest.mark.parametrize("room", ROOMS, ids=str)
+@pytest.mark.parametrize("name", SHOWN)
+def test_all_of_the_page_is_inside_it(name: str, room: tuple[int, int]) -> None:
+    """Whatever the outcome and the room, nothing is drawn below the page's own height."""
+    image, tall = drawn(SHOWN[name], room)
+    assert last_row(image) < tall
+
+
+@pytest.mark.parametrize("zoom", [1.0, 1.5, 2.0])
+@pytest.mark.parametrize("outcome", [TRIAL, LONG], ids=["short", "long"])
+def test_text_is_never_smaller_than_the_windows(outcome: Outcome, zoom: float) -> None:
+    """At 100 to 200% text the page's body text has at least the 13 pixels of the window's, times the zoom."""
+    for width, height in ROOMS:
+        style = PatientPage(ready(outcome)).style(width, height, zoom)
+        assert style.font("body").pixelSize() >= round(13 * zoom) - 1
+
+
+def test_a_usual_screen_needs_no_scrolling() -> None:
+    """At 1280 by 740 and 1024 by 640 every kind of outcome fits at 100% text."""
+    for outcome in SHOWN.values():
+        for width, height in ROOMS[:2]:
+            page = PatientPage(ready(outcome))
+            assert page.least_height(page.style(width, height), width) <= height
+
+
+def test_a_larger_room_makes_a_larger_page() -> None:
+    """A screen of 1920 by 1020 sets larger text than one of 1024 by 640."""
+    page = PatientPage(ready(TRIAL))
+    assert page.style(1920, 1020).scale > 1.3 * page.style(1024, 640).scale
+
+
+def test_paper_colours_are_read_easily() -> None:
+    """Ink and muted text have 4.5:1 on white, icons 3:1."""
+    assert contrast(PAPER.ink, PAPER.page) >= 4.5
+    assert contrast(PAPER.muted, PAPER.page) >= 4.5
+    assert min(contrast(PAPER.accent, PAPER.page), contrast(PAPER.outline, PAPER.page)) >= 3
+
+
+@pytest.mark.parametrize(
+    ("outcome", "without", "affected"), [(AT_TWELVE, 12, 6), (CASE_CONTROL, 12, 6), (HAZARD, 20, 15)]
+)
+def test_the_plan_shows_the_patients_own_risks(outcome: Outcome, without: int, affected: int) -> None:
+    """So many icons as the captions say, from whichever form the effect comes."""
+    it = ready(outcome)
+    assert it.plan.denominator == 100
+    assert (it.plan.without.affected, it.plan.with_.affected) == (without, affected)
+    assert it.words.without.number == f"{without} in 100"
+
+
+def test_a_welcome_outcome_draws_the_others() -> None:
+    """Of 45 and 60 in 100 who heal, 55 and 40 are filled."""
+    it = ready(WELCOME)
+    assert (it.plan.without.affected, it.plan.with_.affected, it.plan.with_.avoided) == (55, 40, 15)
+
+
+def test_the_range_is_drawn_only_where_it_is_asked_for() -> None:
+    """Half-toned icons stand between the limits that the sentence names."""
+    plain, ranged = ready(TRIAL), ready(TRIAL, uncertainty=True)
+    assert plain.plan.with_.uncertain == 0
+    assert ranged.words.range_ == "With night lights, it could be from 7 to 12 in 100."
+    assert ranged.plan.with_.uncertain == 12 - 7
+
+
+def test_what_is_too_small_to_draw_speaks_of_whole_people() -> None:
+    """Bars, and a number of people of whom whole ones can be told."""
+    it = ready(TINY)
+    assert it.plan.denominator is None
+    assert it.words.without.number == "1 in 1,000,000"
+
+
+def test_a_paragraph_is_as_high_as_it_says() -> None:
+    """Measured and drawn height agree, also for scripts without spaces and words wider than the line."""
+    page = PatientPage(ready(TRIAL))
+    style = page.style(800, 600)
+    image = QImage(300, 600, QImage.Format.Format_RGB32)
+    painter = QPainter(image)
+    for text in ("夜間照明は転倒を減らす" * 5, "x" * 200, "الرعاية المعتادة في المستشفى", "a 🙂 b c"):
+        runs = [Run(text, style.font("body"), "#000000"), Run("and more", style.font("figure"), "#000000")]
+        assert draw_paragraph(painter, 0, 0, 200, runs) == paragraph_height(runs, 200) > 0
+    painter.end()
