@@ -4,13 +4,12 @@ from __future__ import annotations
 
 from typing import NamedTuple
 
-from fourcount.appraisal.findings import Carriable, Gap, OutcomeFindings, PrintedFigure
+from fourcount.appraisal.findings import Carriable, Gap, OutcomeFindings
 from fourcount.appraisal.findings.curve import Curve, CurveLine, CurveMark, CurvePoint
 from fourcount.record.outcome import Outcome
-from fourcount.record.paper import USUAL_LEVEL, Choices, Record
+from fourcount.record.paper import Record
 from fourcount.wording import limits, names, numbers
 from fourcount.wording.effects import carriable_name
-from fourcount.wording.form import shown_choices
 from fourcount.wording.lines.as_printed import carried_texts
 from fourcount.wording.subject import subject
 
@@ -106,9 +105,7 @@ def shown_lines(curve: Curve, view: View) -> tuple[CurveLine, ...]:
     return (curve.ratios[view.place],) if view.ratios else curve.lines
 
 
-def curve_words(
-    record: Record, outcome: Outcome, findings: OutcomeFindings, choices: Choices, curve: Curve, view: View
-) -> CurveWords:
+def curve_words(record: Record, outcome: Outcome, findings: OutcomeFindings, curve: Curve, view: View) -> CurveWords:
     """All texts of one view."""
     lines, spoken = shown_lines(curve, view), subject(outcome)
     risk, span = names.risk_name(outcome), names.over_span(outcome)
@@ -124,10 +121,10 @@ def curve_words(
         up=RATIO_AXIS.format(ratio=ratio) if view.ratios else up,
         reference=NO_EFFECT,
         itself=ODDS_ITSELF.format(name=carriable_name(outcome, lines[0].effect)) if view.ratios else "",
-        names=tuple(_line_name(outcome, findings, choices, line, view, curve) for line in lines),
+        names=tuple(_line_name(outcome, line, view, curve) for line in lines),
         marks=tuple(_mark_name(mark) for mark in curve.marks),
         sentence=" ".join(_at(outcome, curve, view, mark) for mark in curve.marks),
-        notes=_notes(outcome, findings, choices, curve, view),
+        notes=_notes(outcome, findings, curve, view),
     )
 
 
@@ -159,15 +156,13 @@ def name_and_value(outcome: Outcome, one: Carriable) -> str:
     return f"{carriable_name(outcome, one)} {value}{per}"
 
 
-def _line_name(
-    outcome: Outcome, findings: OutcomeFindings, choices: Choices, line: CurveLine, view: View, curve: Curve
-) -> str:
+def _line_name(outcome: Outcome, line: CurveLine, view: View, curve: Curve) -> str:
     """The name at a line's end; that of the band's line has the interval too, and says where the line ends."""
     text = name_and_value(outcome, line.effect)
     chosen = view.ratios or line is curve.lines[view.place]
     one = line.effect
     if chosen and not isinstance(one.figure.interval, Gap):
-        level = limits.interval_name(_level(findings, choices, one))
+        level = limits.interval_name(one.level)
         interval = carried_texts(one.effect, outcome, one.figure, adjusted=one.adjusted)[1]
         text += f" ({level} {interval})"
     if line.last < curve.reach:
@@ -221,7 +216,7 @@ def _written(value: float | Gap) -> str:
     return NOT_GIVEN if isinstance(value, Gap) else numbers.ratio(value)
 
 
-def _notes(outcome: Outcome, findings: OutcomeFindings, choices: Choices, curve: Curve, view: View) -> tuple[str, ...]:
+def _notes(outcome: Outcome, findings: OutcomeFindings, curve: Curve, view: View) -> tuple[str, ...]:
     lines = shown_lines(curve, view)
     if not lines:
         return (NOTHING,)
@@ -231,7 +226,7 @@ def _notes(outcome: Outcome, findings: OutcomeFindings, choices: Choices, curve:
     if isinstance(one.figure.interval, Gap):
         found.append(NO_BAND.format(name=name))
     else:
-        level = limits.interval_name(_level(findings, choices, one))
+        level = limits.interval_name(one.level)
         found.append(BAND.format(level=level, name=name, risk=risk))
     if not view.ratios:
         chosen = lines[view.place]
@@ -245,14 +240,6 @@ def _notes(outcome: Outcome, findings: OutcomeFindings, choices: Choices, curve:
         found.append(OTHER_SPAN)
     found += [LEFT_OUT.format(name=carriable_name(outcome, left)) for left in curve.left_out]
     return tuple(found)
-
-
-def _level(findings: OutcomeFindings, choices: Choices, one: Carriable) -> float:
-    """The level of an effect's interval; an adjusted one beside counts keeps that of its print."""
-    adjusted = findings.extras.adjusted
-    if one.adjusted and findings.form != "effect-only" and isinstance(adjusted, PrintedFigure):
-        return adjusted.level or USUAL_LEVEL
-    return shown_choices(findings, choices).level
 
 
 def _nearest(line: CurveLine, start: float) -> float:
