@@ -84,7 +84,7 @@ def _draw_state(painter: QPainter, state: State, palette: Palette, icons: Icons,
         painter.strokePath(_slash(icons), _round(accent, line * 1.7))
     elif state == "added":
         painter.strokePath(outline, QPen(accent, line))
-        painter.strokePath(_plus(icons), _round(accent, line * 1.7))
+        painter.fillPath(_core(icons), accent)
     else:
         painter.fillPath(outline.intersected(_lower_half(icons)), accent)
         painter.strokePath(outline, QPen(accent, line))
@@ -103,14 +103,14 @@ def _slash(icons: Icons) -> QPainterPath:
     return path
 
 
-def _plus(icons: Icons) -> QPainterPath:
-    """A cross inside the shape."""
-    middle = 0.69 if icons == "person" else 0.5
-    half = 0.13 if icons == "person" else 0.17
-    path = QPainterPath(QPointF(0.5 - half, middle))
-    path.lineTo(0.5 + half, middle)
-    path.moveTo(0.5, middle - half)
-    path.lineTo(0.5, middle + half)
+def _core(icons: Icons) -> QPainterPath:
+    """A spot in the middle of the shape; a cross would make a nurse of a person."""
+    middle, across = (0.67, 0.12) if icons == "person" else (0.5, 0.16)
+    path = QPainterPath()
+    if icons == "block":
+        path.addRect(QRectF(0.5 - across, 0.5 - across, 2 * across, 2 * across))
+    else:
+        path.addEllipse(QPointF(0.5, middle), across, across)
     return path
 
 
