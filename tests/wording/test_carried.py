@@ -218,7 +218,7 @@ def test_the_people_are_those_at_this_starting_risk(patient, who):
 def test_the_adjusted_effect_beside_counts_keeps_its_level():
     """Its printed level, whatever was chosen for the table."""
     outcome = of_total(design="cohort", adjusted_text="OR 0.47 (90% CI 0.30 to 0.72)", patient=typed())
-    patient = carried("odds_ratio", effect(0.47, 0.30, 0.72), 0.12, adjusted=True)
+    patient = carried("odds_ratio", effect(0.47, 0.30, 0.72), 0.12, adjusted=True, level=0.9)
     words = patient_words(outcome, findings_with(outcome, patient), Choices(level=0.99), 100)
     assert "90% interval" in words.summary
     assert "90% interval" in words.with_interval

@@ -203,7 +203,7 @@ def test_a_case_control_study_rests_on_two_assumptions():
     """The starting risk from elsewhere, and the odds ratio's being the same there."""
     assert cautions.caution_text(Caution(key="rests-on-baseline", facts={"baseline": 0.12})) == (
         "Every risk, difference and number needed here rests on the starting risk of 12%, which is not from this "
-        "study, and on the odds ratio being the same there."
+        "study, and on the effect being the same there."
     )
 
 

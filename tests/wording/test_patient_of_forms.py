@@ -51,12 +51,15 @@ def test_an_interval_of_a_patient_has_the_level_of_the_print():
 @pytest.mark.parametrize(
     ("outcome", "help_"),
     [
-        (paired(), "Pairs cannot be carried to one patient."),
-        (person_time(), "Rates cannot be carried to one patient."),
-        (effect_only(), "A hazard ratio cannot be turned into a risk here."),
+        (person_time(), "Type a starting risk, or a rate and the time: person-time itself gives no risk."),
+        (effect_only(), "Type a starting risk: the paper’s ratio alone does not give one."),
+        (
+            effect_only("rate_difference", "-2 (-4 to -1) per 1,000"),
+            "A rate difference cannot be turned into a risk here.",
+        ),
         (effect_only("risk_ratio"), "Type a starting risk: the paper’s ratio alone does not give one."),
         (strata(), "Each stratum has its own starting risk: type the patient’s."),
-        (paired("matched"), "Pairs cannot be carried to one patient."),
+        (paired("matched"), "Type a starting risk from another source: a case-control study has none."),
     ],
 )
 def test_where_nobody_is_carried_one_sentence_says_why_or_what_would_help(outcome, help_):

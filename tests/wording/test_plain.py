@@ -253,14 +253,17 @@ def test_low_and_high_starting_risks_are_said(say: Callable[..., PlainWords]) ->
     three = Patient(start_kind="three", low_risk_text="6%", starting_risk_text="12%", high_risk_text="24%")
     words = say(replace(TRIAL, patient=three))
     assert words.without.number == "12 in 100"
-    assert [line[:9] for line in words.other_starts] == ["If 6 in 1", "If 24 in "]
+    assert words.other_starts == (
+        "For people who start at 6 in 100, it is 3 in 100 with night lights.",
+        "For people who start at 24 in 100, it is 13 in 100 with night lights.",
+    )
 
 
 def test_another_span_is_said_in_the_title(say: Callable[..., PlainWords]) -> None:
     """Risks carried to another time say that time, and that this is an assumption."""
     words = say(replace(AT_TWELVE, patient=Patient(starting_risk_text="12%", other_span_text="2 years")))
     assert words.title == "Falls in 2 years"
-    assert plain_texts.OTHER_SPAN in words.study
+    assert words.study == "The study ran for 12 months. For 2 years, we assume that the risk goes on as before."
 
 
 def test_no_difference_is_said_without_a_direction(say: Callable[..., PlainWords]) -> None:

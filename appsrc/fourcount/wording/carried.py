@@ -134,8 +134,6 @@ def relative(ratio: Figure) -> str:
 
 def odds_can_be_carried(findings: OutcomeFindings) -> bool:
     """Whether there is an odds ratio to carry instead, which no starting risk takes past 100%."""
-    if not findings.carriable:
-        return isinstance(findings.measures.get("odds_ratio"), Figure)
     return any(one.effect == "odds_ratio" and not isinstance(one.figure.estimate, Gap) for one in findings.carriable)
 
 

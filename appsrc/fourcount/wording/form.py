@@ -50,14 +50,10 @@ def level_of(findings: OutcomeFindings, choices: Choices) -> float:
 
 
 def patient_choices(findings: OutcomeFindings, choices: Choices) -> Choices:
-    """The record's choices with the level of the patient's intervals: that of the effect that was carried.
-
-    An adjusted effect beside counts keeps the level of its print.
-    """
-    patient, adjusted = findings.patient, findings.extras.adjusted
-    beside = isinstance(patient, PatientFindings) and patient.adjusted and findings.form != "effect-only"
-    if beside and isinstance(adjusted, PrintedFigure):
-        return Choices(family=choices.family, level=adjusted.level or USUAL_LEVEL)
+    """The record's choices with the level of the patient's intervals, which a printed effect keeps."""
+    patient = findings.patient
+    if isinstance(patient, PatientFindings):
+        return Choices(family=choices.family, level=patient.level)
     return shown_choices(findings, choices)
 
 
