@@ -19,8 +19,10 @@ def test_the_keys_in_order():
         "hazard-ratio", "events-counted", "follow-up-varied", "randomised-differs", "losses-overturn",
         "cluster-without-icc", "cluster-corrected", "cluster-uncorrected", "strata-part", "strata-odds-ratio-parts",
         "strata-unlike", "strata-small", "no-meta-analysis", "odds-ratio-differs", "effect-kept-constant",
-        "effect-kept-elsewhere", "baseline-far", "baseline-uncertain", "rests-on-baseline", "totals-are-sampled",
-        "controls-over-time", "observational", "adjusted-effect", "crude-beside-adjusted", "converted-limits",
+        "effect-kept-elsewhere", "difference-kept-constant", "baseline-far", "proportional-hazards", "constant-rates",
+        "other-span", "solved-from-overall", "from-a-rate", "baseline-uncertain", "rests-on-baseline",
+        "totals-are-sampled", "controls-over-time", "observational", "adjusted-effect", "crude-beside-adjusted",
+        "crude-carried", "within-pairs", "adjusted-opposite", "adjusted-turned", "carried-level", "converted-limits",
         "adjusted-converted", "zero-cells", "half-added", "through-no-effect", "family-parts", "rare-harm", "leans",
     ]  # fmt: skip
 

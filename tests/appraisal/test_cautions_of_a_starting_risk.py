@@ -84,7 +84,7 @@ def test_totals_are_sampled_in_a_case_control_study_only(facts, design, baseline
 def test_a_case_control_study_with_a_starting_risk_rests_on_it(facts):
     """Every absolute figure rests on the typed risk, and the controls' sampling decides what the ratio is."""
     found = facts(*TABLE, design="case-control", baseline="12%")
-    assert found["rests-on-baseline"] == [{"baseline": 0.12}]
+    assert found["rests-on-baseline"] == [{"baseline": 0.12, "effect": "odds_ratio"}]
     assert found["controls-over-time"] == [{}]
 
 

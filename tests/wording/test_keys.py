@@ -201,7 +201,8 @@ def test_a_caution_says_the_numbers_it_is_about():
 
 def test_a_case_control_study_rests_on_two_assumptions():
     """The starting risk from elsewhere, and the odds ratio's being the same there."""
-    assert cautions.caution_text(Caution(key="rests-on-baseline", facts={"baseline": 0.12})) == (
+    facts: dict[str, str | float] = {"baseline": 0.12, "effect": "odds_ratio"}
+    assert cautions.caution_text(Caution(key="rests-on-baseline", facts=facts)) == (
         "Every risk, difference and number needed here rests on the starting risk of 12%, which is not from this "
         "study, and on the effect being the same there."
     )

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import math
 import re
 from collections.abc import Mapping
 from types import MappingProxyType
@@ -75,50 +74,9 @@ def odds_ratio_differs(case: Case) -> Facts | None:
     return {"odds_ratio": odds_ratio, "risk_ratio": risk_ratio, **_survey(case)}
 
 
-def effect_kept_constant(case: Case) -> Facts | None:
-    """The study's relative effect is taken to hold at another starting risk, one that is not printed as the same."""
-    carried, study = case.carried, value(case.figures.get("risk_reference"))
-    if carried is None or study is None or _printed_alike(carried.baseline, study):
-        return None
-    effect = value(carried.carried)
-    if effect is None:
-        return None
-    facts: Facts = {"effect": carried.effect, "value": effect, "baseline": carried.baseline, "study": study}
-    return {**facts, **_survey(case)}
-
-
-def baseline_far(case: Case) -> Facts | None:
-    """The starting risk is under half or over twice the reference group's."""
-    carried, study = case.carried, value(case.figures.get("risk_reference"))
-    if carried is None or study is None or study / 2 <= carried.baseline <= study * 2:
-        return None
-    return {"baseline": carried.baseline, "study": study}
-
-
-def baseline_uncertain(case: Case) -> Facts | None:
-    """A range, where there is one, at a bare starting risk holds nothing of that risk's own uncertainty."""
-    carried = case.carried
-    if carried is None or isinstance(carried.difference.estimate, Gap) or isinstance(carried.difference.interval, Gap):
-        return None
-    return {"baseline": carried.baseline}
-
-
-def rests_on_baseline(case: Case) -> Facts | None:
-    """In a case-control study every absolute figure rests on the starting risk."""
-    carried = case.carried
-    if carried is None or case.outcome.design != "case-control":
-        return None
-    return {"baseline": carried.baseline}
-
-
 def totals_are_sampled(case: Case) -> Facts | None:
     """The investigator of a case-control study chose how many cases and controls there are."""
     return {} if case.outcome.design == "case-control" else None
-
-
-def controls_over_time(case: Case) -> Facts | None:
-    """The odds ratio of a case-control study is carried: it must not be if it is a rate ratio."""
-    return None if rests_on_baseline(case) is None else {}
 
 
 def observational(case: Case) -> Facts | None:
@@ -126,18 +84,6 @@ def observational(case: Case) -> Facts | None:
     if case.outcome.design not in OBSERVATIONAL or _adjusted(case):
         return None
     return {"design": case.outcome.design, **_strata(case)}
-
-
-def converted_limits(case: Case) -> Facts | None:
-    """The odds ratio is carried, and its limits were converted at a given starting risk; adjusted ones say so."""
-    conversion = case.conversion
-    if case.carried is None or case.carried.effect != "odds_ratio" or _adjusted(case):
-        return None
-    if isinstance(conversion, Gap) or conversion.baseline_from != "given":
-        return None
-    if isinstance(conversion.risk_ratio.interval, Gap):
-        return None
-    return {"baseline": conversion.baseline}
 
 
 def zero_cells(case: Case) -> Facts | None:
@@ -211,13 +157,6 @@ def leans(case: Case) -> Facts | None:
 def _adjusted(case: Case) -> bool:
     """Whether the table is an effect that was adjusted for something."""
     return isinstance(case.given, PrintedFigure) and is_adjusted(case.given, case.outcome)
-
-
-def _printed_alike(one: float, study: float) -> bool:
-    """Whether a risk is the study's own as papers print it: to 0.1 point, and to two digits near 0% and 100%."""
-    size = min(study, 1 - study)
-    unit = 0.001 if size >= 0.01 else 10.0 ** (math.floor(math.log10(size)) - 1) if size > 0 else 0.0
-    return abs(one - study) <= unit / 2 + 1e-12
 
 
 def _strata(case: Case) -> Facts:

@@ -6,6 +6,7 @@ from collections.abc import Callable
 from dataclasses import dataclass
 from functools import partial
 
+from fourcount.appraisal import carrying_caution_rules as carrying
 from fourcount.appraisal import caution_rules as rules
 from fourcount.appraisal import form_caution_rules as form_rules
 from fourcount.appraisal.case import Case, Facts
@@ -32,9 +33,6 @@ class Rule:
 
 TABLES: tuple[Form, ...] = (*COUNTED_FORMS, "strata")
 """The forms that give four counts."""
-
-WITH_RISKS: tuple[Form, ...] = (*TABLES, "risk-at-time")
-"""The forms that give a risk of the reference group."""
 
 WITHOUT_CLUSTERS: tuple[Form, ...] = ("strata", "pairs", "person-time")
 """The forms whose intervals are not corrected for clusters."""
@@ -165,24 +163,43 @@ CAUTIONS: tuple[Rule, ...] = (
     ),
     Rule(
         key="effect-kept-constant",
-        holds=rules.effect_kept_constant,
-        forms=WITH_RISKS,
+        holds=carrying.effect_kept_constant,
         source="Cochrane Handbook 5.1, 12.5.3; Kent 2018",
     ),
     Rule(
         key="effect-kept-elsewhere",
-        holds=form_rules.kept_elsewhere,
-        forms=("effect-only",),
+        holds=carrying.kept_elsewhere,
         source="Cochrane Handbook 5.1, 12.5.3; Kent 2018",
     ),
     Rule(
+        key="difference-kept-constant",
+        holds=carrying.difference_kept_constant,
+        source="Cochrane Handbook 5.1, 9.4.4.4 (differences vary more than ratios); Deeks 2002, from memory",
+    ),
+    Rule(
         key="baseline-far",
-        holds=rules.baseline_far,
-        forms=WITH_RISKS,
+        holds=carrying.baseline_far,
         source="Kent 2018 and PATH 2020 (an average effect hides variation with risk); half to twice: common practice",
     ),
-    Rule(key="baseline-uncertain", holds=rules.baseline_uncertain, source="Cochrane Handbook 5.1, 12.5.4.5"),
-    Rule(key="rests-on-baseline", holds=rules.rests_on_baseline, source="Knol 2012; common practice"),
+    Rule(
+        key="proportional-hazards",
+        holds=carrying.proportional_hazards,
+        source="Altman and Andersen 1999, BMJ 319:1492; Hernan 2010, from memory",
+    ),
+    Rule(
+        key="constant-rates",
+        holds=carrying.constant_rates,
+        source="common practice: a ratio of constant rates is a ratio of hazards",
+    ),
+    Rule(key="other-span", holds=carrying.other_span, source="common practice: constant hazards"),
+    Rule(
+        key="solved-from-overall",
+        holds=carrying.solved_from_overall,
+        source="common practice: the risk of all is that of the exposed and the unexposed by their shares",
+    ),
+    Rule(key="from-a-rate", holds=carrying.from_a_rate, source="common practice: 1 - exp(-rate x time)"),
+    Rule(key="baseline-uncertain", holds=carrying.baseline_uncertain, source="Cochrane Handbook 5.1, 12.5.4.5"),
+    Rule(key="rests-on-baseline", holds=carrying.rests_on_baseline, source="Knol 2012; common practice"),
     Rule(
         key="totals-are-sampled",
         holds=rules.totals_are_sampled,
@@ -191,7 +208,7 @@ CAUTIONS: tuple[Rule, ...] = (
     ),
     Rule(
         key="controls-over-time",
-        holds=rules.controls_over_time,
+        holds=carrying.controls_over_time,
         source="Knol, Vandenbroucke and others 2008 (what case-control studies estimate), from memory",
     ),
     Rule(
@@ -202,7 +219,6 @@ CAUTIONS: tuple[Rule, ...] = (
     Rule(
         key="adjusted-effect",
         holds=form_rules.adjusted_effect,
-        forms=("effect-only",),
         source="STROBE item 16a; VanderWeele and Ding 2017",
     ),
     Rule(
@@ -211,11 +227,23 @@ CAUTIONS: tuple[Rule, ...] = (
         forms=tuple(form for form in FORMS if form != "effect-only"),
         source="STROBE item 16a (unadjusted and confounder-adjusted estimates)",
     ),
-    Rule(key="converted-limits", holds=rules.converted_limits, source="McNutt 2003"),
+    Rule(
+        key="crude-carried",
+        holds=carrying.crude_carried,
+        source="STROBE item 16a (unadjusted and confounder-adjusted estimates)",
+    ),
+    Rule(
+        key="within-pairs",
+        holds=carrying.within_pairs,
+        source="Greenland, Robins and Pearl 1999 (collapsibility), from memory",
+    ),
+    Rule(key="adjusted-opposite", holds=carrying.adjusted_opposite, source="common practice"),
+    Rule(key="adjusted-turned", holds=carrying.adjusted_turned, source="common practice"),
+    Rule(key="carried-level", holds=carrying.carried_level, source="common practice"),
+    Rule(key="converted-limits", holds=carrying.converted_limits, source="McNutt 2003"),
     Rule(
         key="adjusted-converted",
-        holds=form_rules.adjusted_converted,
-        forms=("effect-only",),
+        holds=carrying.adjusted_converted,
         source="McNutt 2003",
     ),
     Rule(key="zero-cells", holds=rules.zero_cells, forms=COUNTED_FORMS, source="Cochrane Handbook 5.1, 9.2.2.2"),

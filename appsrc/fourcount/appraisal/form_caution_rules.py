@@ -164,29 +164,12 @@ def printed_level(case: Case) -> Facts | None:
 
 def adjusted_effect(case: Case) -> Facts | None:
     """An effect outside trials was adjusted, for what the authors measured and no more."""
-    printed, outcome = case.given, case.outcome
-    if not isinstance(printed, PrintedFigure) or outcome.design not in OBSERVATIONAL:
+    outcome = case.outcome
+    if outcome.design not in OBSERVATIONAL:
         return None
-    if not is_adjusted(printed, outcome):
-        return None
-    return {"design": outcome.design, "adjusted_for": _adjusted_for(case)}
-
-
-def kept_elsewhere(case: Case) -> Facts | None:
-    """A printed effect is taken to hold at a starting risk whose distance from the study's is not known."""
-    carried = case.carried
-    effect = None if carried is None else value(carried.carried)
-    if carried is None or effect is None or not isinstance(case.given, PrintedFigure):
-        return None
-    return {"effect": carried.effect, "value": effect, "baseline": carried.baseline}
-
-
-def adjusted_converted(case: Case) -> Facts | None:
-    """An adjusted odds ratio is converted at one starting risk, which is approximate."""
-    carried, printed = case.carried, case.given
-    if carried is None or carried.effect != "odds_ratio" or not isinstance(printed, PrintedFigure):
-        return None
-    return {"baseline": carried.baseline} if is_adjusted(printed, case.outcome) else None
+    printed = isinstance(case.given, PrintedFigure) and is_adjusted(case.given, outcome)
+    carried = case.carried is not None and case.carried.adjusted
+    return {"design": outcome.design, "adjusted_for": _adjusted_for(case)} if printed or carried else None
 
 
 def crude_beside_adjusted(case: Case) -> Facts | None:

@@ -19,12 +19,11 @@ from fourcount.appraisal.findings import (
     Gap,
     Interval,
     OutcomeFindings,
-    PatientFindings,
 )
 from fourcount.publish.contract_extras import extras_json
 from fourcount.publish.contract_figures import Json, figure_json, measure_json, pair_json, value_json, withheld_json
+from fourcount.publish.contract_patient import asked_of_a_patient, line_json, patient_json
 from fourcount.publish.contract_strata import strata_json
-from fourcount.record.entry.digits import plain
 from fourcount.record.outcome import Form, Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording.cautions import caution_text
@@ -47,7 +46,7 @@ FROM_PRINT: tuple[Form, ...] = ("risk-at-time", "effect-only")
 
 def contract(outcome: Outcome, choices: Choices, findings: OutcomeFindings) -> Json:
     """All that one outcome says, every method and test included."""
-    given: Json = {"patient": _patient(findings.patient)} if plain(outcome.patient.starting_risk_text) else {}
+    given: Json = {"patient": patient_json(findings.patient)} if asked_of_a_patient(outcome) else {}
     return {
         "format": FORMAT,
         "design": outcome.design,
@@ -59,6 +58,7 @@ def contract(outcome: Outcome, choices: Choices, findings: OutcomeFindings) -> J
         **_every_method(outcome, choices, findings),
         "conversion": _conversion(findings.conversion),
         **given,
+        **({} if findings.line is None else {"line": line_json(findings.line)}),
         **({} if findings.strata is None else {"strata": strata_json(findings.strata)}),
         "extras": extras_json(findings.extras),
         "cautions": [{"key": caution.key, "text": caution_text(caution)} for caution in findings.cautions],
@@ -124,20 +124,4 @@ def _conversion(conversion: Conversion | Gap) -> Json:
         "baseline": conversion.baseline,
         "baseline_from": conversion.baseline_from,
         "risk_ratio": figure_json(conversion.risk_ratio),
-    }
-
-
-def _patient(patient: PatientFindings | Gap) -> Json:
-    """The effect at a starting risk from elsewhere, which is a bare number: only what follows from it has limits."""
-    if isinstance(patient, Gap):
-        return withheld_json(patient)
-    return {
-        "baseline": patient.baseline,
-        "effect": patient.effect,
-        "risk_without": value_json(patient.without.estimate),
-        "risk_with": figure_json(patient.with_),
-        "difference": figure_json(patient.difference),
-        "number_needed": measure_json(patient.number_needed),
-        "risk_ratio": figure_json(patient.risk_ratio),
-        "range_from": patient.range_from,
     }

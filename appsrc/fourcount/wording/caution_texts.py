@@ -52,7 +52,7 @@ TEXTS = {
         "The starting risk",
         (
             "Every risk, difference and number needed here rests on the starting risk of {baseline}, "
-            "which is not from this study, and on the odds ratio being the same there."
+            "which is not from this study, and on the {effect} being the same there."
         ),
     ),
     "totals-are-sampled": (
@@ -213,5 +213,76 @@ TEXTS = {
     "adjusted-converted": (
         "An adjusted odds ratio",
         "The adjusted odds ratio is converted at {baseline} as if crude; this is approximate.",
+    ),
+    "difference-kept-constant": (
+        "The same difference elsewhere",
+        (
+            "The difference is assumed to be the same at {baseline} as in the study, whose own risk is not known here; "
+            "differences vary with the starting risk more than ratios do."
+        ),
+    ),
+    "proportional-hazards": (
+        "A hazard ratio carried",
+        (
+            "The hazard ratio is assumed to stay the same over the whole time and at {baseline}, and other events that "
+            "compete are left out."
+        ),
+    ),
+    "constant-rates": (
+        "A rate ratio carried",
+        "Both groups’ rates are assumed to stay constant over the time, and their ratio to be the same at {baseline}.",
+    ),
+    "other-span": (
+        "Another time span",
+        (
+            "Risks over another time span assume that both groups’ hazards go on as in the study: no figure here can "
+            "check that."
+        ),
+    ),
+    "solved-from-overall": (
+        "A starting risk worked out",
+        (
+            "The starting risk of {baseline} follows from an overall risk and a share of people exposed, both taken as "
+            "certain, and from the {effect} being the same there."
+        ),
+    ),
+    "from-a-rate": (
+        "A starting risk from a rate",
+        "The starting risk of {baseline} assumes that the rate stays constant over the time span.",
+    ),
+    "crude-carried": (
+        "A crude effect carried",
+        (
+            "The {effect} carried to {baseline} is crude, so other differences between the groups go with it; an "
+            "adjusted effect from the paper would be better."
+        ),
+    ),
+    "within-pairs": (
+        "An odds ratio of pairs",
+        (
+            "The odds ratio of pairs holds within pairs; at a starting risk averaged over many people it tends to move "
+            "the risk too far."
+        ),
+    ),
+    "adjusted-opposite": (
+        "Adjusted and crude part",
+        (
+            "The adjusted {effect} and this table’s own figures point in opposite directions. It is taken as printed "
+            "of {first} against {second}: check that."
+        ),
+    ),
+    "adjusted-turned": (
+        "The adjusted effect turned",
+        (
+            "The adjusted {effect} is taken as printed of {first} against {second}, and is turned round here to fit "
+            "the groups and the outcome that are counted."
+        ),
+    ),
+    "carried-level": (
+        "The level of the paper",
+        (
+            "The patient’s intervals keep the level of {level} at which the adjusted effect is printed; the level of "
+            "{chosen} chosen here does not change them."
+        ),
     ),
 }

@@ -29,6 +29,14 @@ RATIO_KEPT_CONSTANT = (
     "The {effect} is assumed to be the same at {baseline} as at the study’s own {study}; keeping the {effect} of not "
     "having the event constant instead would give other figures."
 )
+DIFFERENCE_KEPT_CONSTANT = (
+    "The difference is assumed to be the same at {baseline} as at the study’s own {study}; differences vary with the "
+    "starting risk more than ratios do."
+)
+CRUDE_BESIDE_ADJUSTED = (
+    "The {effect} carried to {baseline} is crude, so other differences between the groups go with it; the paper’s "
+    "adjusted effect can be carried instead."
+)
 SAID_OF_THE_PATIENT = ("baseline-uncertain",)
 """The cautions that the patient's own words say already, wherever both stand together."""
 
@@ -40,6 +48,10 @@ OVER_STRATA = {
     "observational": (
         "A {design} does not assign its groups: pooling deals with what the strata differ in and with nothing else, "
         "and the crude figures not even with that. Other differences between the groups may explain them."
+    ),
+    "crude-carried": (
+        "The {effect} carried to {baseline} is pooled over the strata and no more, so what else differs between the "
+        "groups goes with it."
     ),
     "crude-beside-adjusted": (
         "The figures of this table are crude, or pooled over its strata and no more; the paper’s own {measure}, "
@@ -57,6 +69,7 @@ SCENARIOS = {
 }
 ADJUSTED_FOR = {"adjusted-effect": ", here {what}", "crude-beside-adjusted": " for {what}"}
 PRINT_UNITS = {"percent": "%", "per-1000": " per 1,000"}
+FIRST_AND_SECOND = {"first": "the first group", "second": "the second"}
 UNNAMED = {"index": "Index group", "reference": "Reference group"}
 UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
 OPPOSITE = "point in opposite directions"
@@ -76,8 +89,12 @@ def _template(caution: Caution) -> str:
         return SEVERAL_ZEROS
     if key == "half-added" and facts.get("measure") == "risk_ratio":
         return HALF_ADDED_TO_A_RATIO
-    if key == "effect-kept-constant" and facts.get("effect") != "odds_ratio":
+    if key == "effect-kept-constant" and facts.get("effect") == "risk_ratio":
         return RATIO_KEPT_CONSTANT
+    if key == "difference-kept-constant" and "study" in facts:
+        return DIFFERENCE_KEPT_CONSTANT
+    if key == "crude-carried" and "beside" in facts:
+        return CRUDE_BESIDE_ADJUSTED
     if key == "observational" and facts.get("design") == "matched":
         return MATCHED
     if "strata" in facts and key in OVER_STRATA:
@@ -104,17 +121,32 @@ def _said(caution: Caution) -> dict[str, str]:
     if "adjusted_for" in facts:
         what = quoted(str(facts["adjusted_for"]))
         said["adjusted_for"] = ADJUSTED_FOR[caution.key].format(what=what) if what else ""
-    if caution.key == "randomised-differs" and not str(facts.get("label", "")).strip():
-        said["label"] = UNNAMED[str(facts.get("group", ""))] if facts.get("group") in UNNAMED else "One group"
-    if caution.key == "crude-beside-adjusted":
-        digits = str(facts.get("value", "")).replace("-", numbers.MINUS)
-        said["value"] = f"{digits}{PRINT_UNITS.get(str(facts.get('print_unit')), '')}"
+    if caution.key in ("adjusted-opposite", "adjusted-turned"):
+        said |= {name: _label(facts, name, stand_in) for name, stand_in in FIRST_AND_SECOND.items()}
+    said |= _said_of_a_print(caution)
     if "crude" in facts and "pooled" in facts:
         said["apart"] = OPPOSITE if _opposite(facts) else A_TENTH
     for name in ("crude", "pooled"):
         if name in facts and facts.get("measure") == "risk_difference":
             said[name] = _per_100(facts[name])
     return said
+
+
+def _said_of_a_print(caution: Caution) -> dict[str, str]:
+    """A group of a trial's report, and an effect with the digits and the unit of its print."""
+    facts = caution.facts
+    said: dict[str, str] = {}
+    if caution.key == "randomised-differs" and not str(facts.get("label", "")).strip():
+        said["label"] = UNNAMED[str(facts.get("group", ""))] if facts.get("group") in UNNAMED else "One group"
+    if caution.key == "crude-beside-adjusted":
+        digits = str(facts.get("value", "")).replace("-", numbers.MINUS)
+        said["value"] = f"{digits}{PRINT_UNITS.get(str(facts.get('print_unit')), '')}"
+    return said
+
+
+def _label(facts: Mapping[str, Fact], name: str, stand_in: str) -> str:
+    """A group's label in quotation marks."""
+    return f"“{quoted(str(facts[name]))}”" if name in facts else stand_in
 
 
 def _opposite(facts: Mapping[str, Fact]) -> bool:

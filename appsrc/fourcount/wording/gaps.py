@@ -2,8 +2,6 @@
 
 from __future__ import annotations
 
-from collections import defaultdict
-
 from fourcount.record.entry.readings import Mark, Unreadable
 from fourcount.record.outcome import Form
 from fourcount.stats.results import Gap
@@ -83,6 +81,7 @@ GAP_TEXTS = {
     "losses-of-one-group": "Type how many were lost in each of the two groups; one of them is not known.",
     "effect-out-of-range": "A printed ratio cannot be below 0, nor a difference beyond 100 in 100; check the print.",
     "effect-needs-baseline": "Type a starting risk: the paper’s ratio alone does not give one.",
+    "difference-needs-baseline": "Type a starting risk: the paper’s difference alone does not give one.",
     "strata-need-baseline": "Each stratum has its own starting risk: type the patient’s.",
     "other-outcome-unknown": "The printed effect says nothing of the other outcome: count the one that it is of.",
     "limits-not-printed": "A risk stands without its limits, so no interval of the difference or the ratio follows.",
@@ -128,17 +127,10 @@ GAP_TEXTS = {
     "formula-beyond-risks": "The bare formula’s limit parts the two risks farther than they can lie apart; "
     "the score intervals do not.",
 }
-NOT_CARRIED: defaultdict[str, str] = defaultdict(
-    lambda: GAP_TEXTS["carried-later"],
-    {"pairs": "Pairs cannot be carried to one patient.", "person-time": "Rates cannot be carried to one patient."},
-)
 NOT_CARRIED_EFFECTS = {
-    "hazard_ratio": "A hazard ratio cannot be turned into a risk here.",
-    "rate_ratio": "A rate ratio cannot be turned into a risk here.",
-    "risk_difference": "A risk difference alone cannot be carried to another starting risk.",
     "rate_difference": "A rate difference cannot be turned into a risk here.",
 }
-"""What is said of a form, or a printed effect, that no patient's risk follows from."""
+"""What is said of a printed effect that no patient's risk follows from."""
 
 LIMIT_TEXTS = {
     "beyond-one": "The upper limit of the risk would pass 100%, so the interval is open there; "
@@ -157,10 +149,10 @@ def gap_text(gap: Gap) -> str:
 
 
 def why_no_patient(gap: Gap, form: Form, measure: str) -> str:
-    """Why nothing is carried to one patient, in the form's own words; ``measure`` is that of a printed effect."""
-    if gap.key != "carried-later":
+    """Why nothing is carried to one patient; ``measure`` is that of a printed effect."""
+    if gap.key != "carried-later" or form != "effect-only":
         return gap_text(gap)
-    return NOT_CARRIED_EFFECTS.get(measure, GAP_TEXTS[gap.key]) if form == "effect-only" else NOT_CARRIED[form]
+    return NOT_CARRIED_EFFECTS.get(measure, GAP_TEXTS[gap.key])
 
 
 def limit_text(gap: Gap) -> str:

@@ -61,6 +61,7 @@ GAP_KEYS = (
     "losses-of-one-group",  # how many were lost is known in one group only, or in none
     "effect-out-of-range",  # a printed ratio below 0, or a printed difference beyond 100 in 100
     "effect-needs-baseline",  # a printed effect alone holds no starting risk
+    "difference-needs-baseline",  # nor does a printed difference
     "strata-need-baseline",  # strata have a starting risk each, and none in common
     "other-outcome-unknown",  # this printed effect says nothing of the other outcome
     "not-counts",  # this form has no four counts

@@ -125,6 +125,7 @@ def _study(printed: PrintedFigure, figure: Figure, outcome: Outcome) -> Study:
     return Study(
         outcome=outcome,
         carriable=() if one is None else (one,),
+        needs="difference-needs-baseline" if printed.measure == "risk_difference" else "effect-needs-baseline",
         odds_ratio=one if one is not None and one.effect == "odds_ratio" else None,
         number_needed="design-before-after" if outcome.design == "before-after" else needed,
     )
