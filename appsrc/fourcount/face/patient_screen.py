@@ -269,7 +269,7 @@ class PatientScreen(QWidget):
 
     def _on_changed(self) -> None:
         """Follow the record; where nothing of it can be shown any more, there is nothing to see."""
-        at = self.outcome
+        at = self.outcome if self._pages else 0
         self._take_pages()
         if self._pages:
             self.go_to(at)

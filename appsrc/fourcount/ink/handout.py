@@ -123,7 +123,9 @@ def compose(record: Record, named: Sequence[Named], paper: Paper, version: str, 
     page = _composed(record, named, paper, version, today)
     if page is not None:
         return page
-    fits = next((n for n in range(len(named) - 1, 0, -1) if _composed(record, named[:n], paper, version, today)), 0)
+    fits = 0
+    while fits + 1 < len(named) and _composed(record, named[: fits + 1], paper, version, today):
+        fits += 1
     if not fits:
         return NoPage(words.TOO_LONG)
     rest = len(named) - fits
@@ -181,7 +183,12 @@ def _highest(blocks: Sequence[Block], style: PaperStyle, way: Try, wide: float, 
     """The height of the arrays, one for all, at which the blocks fill the room; None where they need more."""
 
     def fits_at(array: int) -> bool:
-        return sum(block.height(style, way.setting, wide, array) for block in blocks) <= room
+        left = room
+        for block in blocks:
+            left -= block.height(style, way.setting, wide, array)
+            if left < 0:
+                return False
+        return True
 
     if not fits_at(way.least):
         return None

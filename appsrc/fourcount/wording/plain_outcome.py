@@ -276,11 +276,19 @@ def _other_starts(patient: PatientFindings, turned: bool, people: int, index: st
     for other in (patient.low, patient.high):
         risks = None if other is None or isinstance(other, Gap) else plain_risks(other, turned)
         if risks is not None:
-            of = max(people, people_in_text(risks))
+            of = people if _apart_at(risks, people) else people_in_text(risks)
             before, after = (of_people.affected(risk, of) for risk in (risks.without, risks.with_))
             line = plain_texts.OTHER_START.format(before=before, after=after, people=numbers.whole(of), index=index)
             lines.append(line)
     return tuple(lines)
+
+
+def _apart_at(risks: PlainRisks, people: int) -> bool:
+    """Whether whole numbers of so many people tell both risks, and apart from each other."""
+    pair = (risks.without, risks.with_)
+    told = not any(of_people.hidden(risk, people) for risk in pair)
+    before, after = (numbers.people(risk, people) for risk in pair)
+    return told and (before != after or risks.difference == 0)
 
 
 def _study(outcome: Outcome, patient: PatientFindings) -> str:
@@ -288,8 +296,9 @@ def _study(outcome: Outcome, patient: PatientFindings) -> str:
     said = [plain_texts.STUDIES.get(outcome.design, "")]
     if _times_differ(outcome):
         said.append(plain_texts.VARIED.format(span=f" ({names.bare(outcome.span_text)})"))
-    if patient.other_span is not None:
-        said.append(plain_texts.OTHER_SPAN)
+    if patient.other_span is not None and patient.study_span is not None:
+        ran, other = spans.duration(patient.study_span), spans.duration(patient.other_span)
+        said.append(plain_texts.OTHER_SPAN.format(span=ran, other=other))
     return " ".join(part for part in said if part)
 
 

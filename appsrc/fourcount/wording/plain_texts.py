@@ -37,7 +37,7 @@ OPEN = "The study leaves open that there is no difference."
 RANGE = "{index}, it could be from {low} to {high} in {people}."
 RELATIVE = "Going from {before} to {after} in {people} is also called “{percent} {word}”."
 BEFORE_ROUNDING = "(That is worked out before rounding.)"
-OTHER_START = "If {before} in {people} is the risk at the start, it is {after} in {people} {index}."
+OTHER_START = "For people who start at {before} in {people}, it is {after} in {people} {index}."
 
 CERTAINTY_NAMES: dict[Certainty, str] = {
     "": "Certainty: not rated.",
@@ -80,7 +80,7 @@ STUDIES: dict[Design, str] = {
     "before-after": "The study looked at people before and after. Other things may have changed as well.",
 }
 VARIED = "Not all people in the study were followed for the same time{span}."
-OTHER_SPAN = "The study ran for another time. We assume that the risk stays as steady."
+OTHER_SPAN = "The study ran for {span}. For {other}, we assume that the risk goes on as before."
 
 ONE_STUDY = "Based on one study. Talk it over with your clinician."
 PLACE = "{number} of {all}"

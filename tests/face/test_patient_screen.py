@@ -1,0 +1,206 @@
+"""The patient view: full screen, one outcome at a time, dark on white; refused until nothing is missing."""
+
+from __future__ import annotations
+
+from collections.abc import Callable
+
+import pytest
+from msgspec.structs import replace
+from PySide6.QtCore import Qt
+from PySide6.QtGui import QAccessible, QColor, QKeySequence
+from PySide6.QtTest import QTest
+from PySide6.QtWidgets import QAbstractButton, QApplication
+from pytestqt.qtbot import QtBot
+
+from fourcount.face.patient_screen import PatientScreen, open_screen
+from fourcount.face.window import MainWindow
+from fourcount.record.outcome import Outcome
+from fourcount.record.paper import Record
+from patient_outcomes import AT_TWELVE, HARM, TRIAL, WELCOME
+
+UNNAMED = replace(TRIAL, span_text="", name_text="Sleep")
+SEVERAL = Record(title_text="Night lights", outcomes=(AT_TWELVE, HARM, UNNAMED, WELCOME))
+
+Opened = Callable[..., tuple[MainWindow, PatientScreen]]
+
+
+@pytest.fixture
+def opened(open_window: Callable[..., MainWindow], qtbot: QtBot) -> Opened:
+    """A window on a record, with the patient view over it."""
+
+    def make(*outcomes: Outcome) -> tuple[MainWindow, PatientScreen]:
+        window = open_window(Record(outcomes=outcomes) if outcomes else SEVERAL)
+        screen = open_screen(window)
+        assert screen is not None
+        qtbot.waitUntil(screen.isVisible)
+        return window, screen
+
+    return make
+
+
+def press(screen: PatientScreen, *keys: str) -> None:
+    """Press keys in the patient view."""
+    for key in keys:
+        QTest.keyClick(screen.canvas, QKeySequence(key)[0].key())
+
+
+def title(screen: PatientScreen) -> str:
+    """What the page is about, as a screen reader says it."""
+    return screen.canvas.accessibleName()
+
+
+def test_it_fills_the_screen(opened: Opened) -> None:
+    """Nothing but the page is there to be seen."""
+    _, screen = opened()
+    assert screen.isFullScreen()
+    assert title(screen) == "Falls in 12 months"
+
+
+def test_arrows_lead_among_the_outcomes_that_are_ready(opened: Opened) -> None:
+    """The unfinished one is passed over; the count is of those that can be shown; the ends are ends."""
+    _, screen = opened()
+    assert screen.place.text() == "1 of 3"
+    press(screen, "Right", "Right")
+    assert (title(screen), screen.place.text()) == ("Healing in 12 weeks", "3 of 3")
+    press(screen, "Right")
+    assert screen.place.text() == "3 of 3"
+    press(screen, "Left")
+    assert title(screen) == "Bleeding in 12 months"
+    press(screen, "End", "Home")
+    assert screen.place.text() == "1 of 3"
+
+
+def test_the_links_do_what_the_arrows_do(opened: Opened) -> None:
+    """Back and Next can be clicked, and are off at the ends."""
+    _, screen = opened()
+    assert not screen.back.isEnabled()
+    QTest.mouseClick(screen.next, Qt.MouseButton.LeftButton)
+    assert screen.place.text() == "2 of 3"
+    QTest.mouseClick(screen.back, Qt.MouseButton.LeftButton)
+    assert screen.place.text() == "1 of 3"
+
+
+def test_one_outcome_has_nowhere_to_go(opened: Opened) -> None:
+    """No count and no arrows where there is one outcome."""
+    _, screen = opened(TRIAL)
+    assert not screen.back.isVisible()
+    assert not screen.next.isVisible()
+    assert screen.place.text() == ""
+
+
+def test_escape_leaves(opened: Opened, qtbot: QtBot) -> None:
+    """Escape closes the view and nothing else."""
+    window, screen = opened()
+    with qtbot.waitSignal(screen.destroyed):
+        press(screen, "Escape")
+    assert window.isVisible()
+
+
+def test_it_begins_with_the_outcome_in_view(open_window: Callable[..., MainWindow]) -> None:
+    """What the clinician looks at is what the patient is shown first."""
+    window = open_window(SEVERAL)
+    window.session.look_at(3)
+    screen = open_screen(window)
+    assert screen is not None
+    assert title(screen) == "Healing in 12 weeks"
+
+
+def test_it_is_refused_with_what_is_missing(open_window: Callable[..., MainWindow]) -> None:
+    """Without a time span there is no view; the window says what to fill in, and no longer once it is filled in."""
+    window = open_window(Record(outcomes=(UNNAMED,)))
+    assert open_screen(window) is None
+    assert window.banner.isVisible()
+    assert window.banner.words.text() == "Before a patient is shown this, fill in the time span."
+    window.session.edit_text("span_text", "12 months")
+    assert open_screen(window) is not None
+    assert not window.banner.isVisible()
+
+
+@pytest.mark.parametrize("outcome", [Outcome(), replace(TRIAL, table=Outcome().table)], ids=["empty", "no counts"])
+def test_an_unfinished_table_is_refused(open_window: Callable[..., MainWindow], outcome: Outcome) -> None:
+    """No counts, no view, and a sentence."""
+    window = open_window(Record(outcomes=(outcome,)))
+    assert open_screen(window) is None
+    assert window.banner.words.text()
+
+
+def test_it_is_white_in_a_dark_window(opened: Opened) -> None:
+    """Dark on white for a projector, whatever the window looks like."""
+    window, screen = opened()
+    window.look.set_appearance("dark")
+    image = screen.grab().toImage()
+    corners = [(2, 2), (image.width() - 3, 2), (2, image.height() - 3)]
+    assert {image.pixelColor(*corner).name() for corner in corners} == {QColor("#FFFFFF").name()}
+
+
+def test_the_whole_page_is_told_to_a_screen_reader(opened: Opened) -> None:
+    """One object with the full sentences; every control has a name; a step is told as another page."""
+    _, screen = opened()
+    told = QAccessible.queryAccessibleInterface(screen.canvas)
+    description = told.text(QAccessible.Text.Description)
+    for part in ("12 in 100", "6 fewer of these 100", "We cannot say which people.", "Certainty: not rated."):
+        assert part in description
+    assert all(button.accessibleName() for button in screen.findChildren(QAbstractButton) if button.isVisible())
+    press(screen, "Right")
+    assert "10 more of these 100 bleed" in told.text(QAccessible.Text.Description)
+
+
+def test_tab_walks_what_can_be_pressed(opened: Opened, qtbot: QtBot) -> None:
+    """From the page to Next, the range and the way out, each at least 24 pixels high."""
+    _, screen = opened()
+    qtbot.waitUntil(screen.isActiveWindow)
+    screen.canvas.setFocus()
+    seen = []
+    for _ in range(3):
+        QTest.keyClick(QApplication.focusWidget() or screen, Qt.Key.Key_Tab)
+        seen.append(QApplication.focusWidget())
+    assert seen == [screen.next, screen.range, screen.leave]
+    assert all(widget is not None and widget.height() >= 24 for widget in seen)
+
+
+def test_the_range_is_one_click_away(opened: Opened) -> None:
+    """Off at first; on, the sentence names both ends, and the link turns round."""
+    _, screen = opened(TRIAL)
+    before = screen.grab().toImage()
+    QTest.mouseClick(screen.range, Qt.MouseButton.LeftButton)
+    assert screen.range.text() == "Hide the range"
+    assert screen.grab().toImage() != before
+    QTest.mouseClick(screen.range, Qt.MouseButton.LeftButton)
+    assert screen.grab().toImage() == before
+
+
+def test_it_follows_the_record(opened: Opened, qtbot: QtBot) -> None:
+    """A change is seen at once; where nothing can be shown any more the view closes."""
+    window, screen = opened(TRIAL)
+    window.session.edit_text("name_text", "Tumbles")
+    assert title(screen) == "Tumbles in 12 months"
+    with qtbot.waitSignal(screen.destroyed):
+        window.session.edit_text("span_text", "")
+
+
+@pytest.mark.parametrize("zoom", [1.0, 1.5, 2.0])
+@pytest.mark.parametrize("size", [(1024, 700), (640, 480)], ids=str)
+def test_nothing_is_lost_at_larger_text(opened: Opened, zoom: float, size: tuple[int, int]) -> None:
+    """The page is as wide as the screen, what is taller can be scrolled to, and every link keeps its whole words."""
+    window, screen = opened()
+    window.look.set_zoom(zoom)
+    screen.showNormal()
+    screen.resize(*size)
+    QApplication.sendPostedEvents()
+    assert screen.canvas.width() <= screen.width()
+    bar = screen._scroll.verticalScrollBar()
+    assert bar.maximum() >= screen.canvas.height() - screen._scroll.height()
+    shown = [link for link in (screen.next, screen.range, screen.leave) if link.isVisible()]
+    assert all(link.width() >= link.fontMetrics().horizontalAdvance(link.text()) for link in shown)
+    assert all(screen.rect().contains(link.geometry().translated(screen._links.pos())) for link in shown)
+
+
+def test_down_scrolls_a_page_that_is_taller(opened: Opened) -> None:
+    """Up and down move the page where it is taller than the screen."""
+    window, screen = opened()
+    window.look.set_zoom(2.0)
+    screen.showNormal()
+    screen.resize(700, 420)
+    QApplication.sendPostedEvents()
+    press(screen, "Down")
+    assert screen._scroll.verticalScrollBar().value() > 0
