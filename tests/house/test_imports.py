@@ -27,7 +27,7 @@ MAY_IMPORT = {
 NOBODY_IMPORTS = (
     "scipy.stats",
     "scipy.optimize",
-    "matplotlib",
+    "matplotlib.pyplot",
     "pandas",
     "statsmodels",
     "socket",
@@ -76,7 +76,7 @@ def test_a_room_imports_only_what_it_was_built_on(file: Path) -> None:
 
 @pytest.mark.parametrize("file", FILES, ids=lambda file: str(file.relative_to(PACKAGE)))
 def test_nobody_imports_what_is_slow_or_leaves_the_machine(file: Path) -> None:
-    """Neither scipy.stats, scipy.optimize, matplotlib nor anything that opens a connection is imported anywhere."""
+    """Neither scipy.stats, scipy.optimize, pyplot nor anything that opens a connection is imported anywhere."""
     names = imported_by(file)
     assert not [name for name in names for banned in NOBODY_IMPORTS if name == banned or name.startswith(banned + ".")]
 
@@ -86,6 +86,15 @@ def test_qt_stays_in_ink_and_face(file: Path) -> None:
     """Only the two rooms that paint import PySide6."""
     uses_qt = any(name.split(".")[0] in ("PySide6", "shiboken6") for name in imported_by(file))
     assert not uses_qt or own_room(file) in ("ink", "face")
+
+
+def test_one_file_knows_matplotlib() -> None:
+    """Only the pen of the curve imports matplotlib, and only inside its functions: nothing else waits for it."""
+    users = [file for file in FILES if any(name.split(".")[0] == "matplotlib" for name in imported_by(file))]
+    assert users == [PACKAGE / "ink" / "curve.py"]
+    outside = ast.parse(users[0].read_text(encoding="utf-8")).body
+    loaded = [node for node in outside if isinstance(node, ast.Import | ast.ImportFrom)]
+    assert "matplotlib" not in " ".join(ast.unparse(node) for node in loaded)
 
 
 def test_only_stats_computes_with_arrays() -> None:

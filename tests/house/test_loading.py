@@ -62,3 +62,33 @@ def test_the_window_paints_before_numpy() -> None:
     rooms = {name.split(".")[1] for name in loaded if name.startswith("fourcount.")}
     assert {"face", "ink", "picture", "record", "wording"} <= rooms
     assert not rooms & {"appraisal", "stats", "publish"}
+
+
+CURVE = """
+import os, sys
+
+os.environ["QT_QPA_PLATFORM"] = "offscreen"
+from fourcount.appraisal.appraise import appraise
+from fourcount.appraisal.curve import curve
+from fourcount.ink.curve import draw_curve
+from fourcount.ink.curve_layout import Sheet
+from fourcount.ink.palette import LIGHT
+from fourcount.wording.curve import View, curve_words
+from fourcount.wording.example import worked_example
+
+before = set(sys.modules)
+record = worked_example()
+findings = appraise(record.outcomes[0], record.choices)
+drawn = curve(findings)
+words = curve_words(record, record.outcomes[0], findings, drawn, View())
+assert "matplotlib" not in before
+assert draw_curve(drawn, View(), words, LIGHT, Sheet(600, 400))
+"""
+"""A curve drawn in a process of its own."""
+
+
+def test_a_curve_loads_its_library_when_it_is_drawn() -> None:
+    """The library comes with the first drawing and not before it; no window system of its own comes with it."""
+    loaded = loaded_after(CURVE)
+    assert "matplotlib.figure" in loaded
+    assert not loaded & {"matplotlib.pyplot", "tkinter", "scipy.stats", "matplotlib.backends.backend_qtagg"}

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Sequence
 
-from PySide6.QtCore import QRect, QSize, Qt, Signal
+from PySide6.QtCore import QRect, QSize, Qt, QTimer, Signal
 from PySide6.QtGui import QFocusEvent, QImage, QPainter, QPaintEvent, QPen, QResizeEvent
 from PySide6.QtWidgets import QAbstractItemView, QHeaderView, QSizePolicy, QTableWidget, QTableWidgetItem, QWidget
 
@@ -13,7 +13,7 @@ from fourcount.face.scroll_bar import ScrollBar
 from fourcount.wording import curve_labels as labels
 from fourcount.wording.curve import CurveRow
 
-LEAST = QSize(360, 280)
+LEAST = QSize(360, 190)
 """Pixels at 100% text below which the drawing does not go."""
 
 
@@ -90,6 +90,7 @@ class CurveTable(QTableWidget):
         self.setTabKeyNavigation(False)
         self.setFrameShape(QTableWidget.Shape.NoFrame)
         self.setWordWrap(True)
+        self.setShowGrid(False)
         self.verticalHeader().hide()
         self.horizontalHeader().setSectionResizeMode(QHeaderView.ResizeMode.Stretch)
         self.horizontalHeader().setDefaultAlignment(
@@ -123,7 +124,8 @@ class CurveTable(QTableWidget):
 
     def resizeEvent(self, event: QResizeEvent) -> None:
         super().resizeEvent(event)
-        self._fit()
+        if event.size().width() != event.oldSize().width():
+            QTimer.singleShot(0, self._fit)  # once the columns have their widths
 
     def _on_look_changed(self) -> None:
         self._fit()

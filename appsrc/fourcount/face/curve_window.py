@@ -7,7 +7,7 @@ from itertools import pairwise
 from typing import TYPE_CHECKING, NamedTuple
 
 from PySide6.QtCore import QSize, Qt, QTimer
-from PySide6.QtGui import QAction, QCloseEvent, QGuiApplication, QImage, QKeySequence
+from PySide6.QtGui import QAction, QGuiApplication, QImage, QKeySequence, QShowEvent
 from PySide6.QtWidgets import QDialog, QScrollArea, QVBoxLayout, QWidget
 
 from fourcount.appraisal.curve import curve
@@ -15,14 +15,14 @@ from fourcount.appraisal.findings.curve import Curve
 from fourcount.face import curve_file
 from fourcount.face.buttons import Button
 from fourcount.face.curve_parts import CurveCanvas, CurveTable
-from fourcount.face.curve_worker import CurveWorker, Purpose
+from fourcount.face.curve_worker import CurveWorker
 from fourcount.face.fields import ChoiceField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.links import Link
 from fourcount.face.look import family_in_use
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.face.text import Words
-from fourcount.ink.curve import Format, draw_curve
+from fourcount.ink.curve import draw_curve
 from fourcount.ink.curve_layout import Sheet
 from fourcount.ink.palette import PAPER, Palette
 from fourcount.picture.curve_axes import even_marks
@@ -93,7 +93,7 @@ class CurveWindow(QDialog):
         self._build()
         self._connect_all()
         self._show_state()
-        self.canvas.setFocus(Qt.FocusReason.OtherFocusReason)
+        self.view.setFocus(Qt.FocusReason.OtherFocusReason)
 
     def _action(self, words: str, keys: QKeySequence.StandardKey) -> QAction:
         action = QAction(words, self)
@@ -147,6 +147,7 @@ class CurveWindow(QDialog):
         self.save_action.triggered.connect(self._on_save)
         self.copy_action.triggered.connect(self._on_copy)
         self.close_action.triggered.connect(self.close)
+        self.finished.connect(self._worker.close)
 
     # What is shown
 
@@ -169,19 +170,21 @@ class CurveWindow(QDialog):
         self.sentence.show_words(words.sentence)
         self.notes.show_words(" ".join(words.notes))
         self.table.show_rows(curve_head(outcome, found, view), curve_rows(found, view, even_marks(found.reach)))
-        for widget in (self.view, self.whole, self.numbers, self.save, self.copy):
-            widget.setEnabled(bool(self._views))
+        self._show_enabled()
         ratio, size = self.devicePixelRatioF(), self.canvas.size()
         sheet = Sheet(size.width(), size.height(), self._look.zoom, ratio, family_in_use())
         self._now = Request(found, view, words, self._look.palette, sheet)
-        self._draw("screen", self._now)
+        if self._now != self._asked and self.isVisible():
+            self._asked = self._now
+            self._worker.ask(self._now, partial(draw_curve, *self._now))
 
-    def _draw(self, purpose: Purpose, request: Request, key: object = None, kind: Format = "png") -> None:
-        if purpose == "screen":
-            if request == self._asked or not self.isVisible():
-                return
-            self._asked = request
-        self._worker.ask(purpose, key or request, partial(draw_curve, *request, kind))
+    def _show_enabled(self) -> None:
+        """What leaves the window is drawn here and now, so that the library has to be there."""
+        for widget in (self.view, self.whole, self.numbers):
+            widget.setEnabled(bool(self._views))
+        for action, button in ((self.save_action, self.save), (self.copy_action, self.copy)):
+            action.setEnabled(bool(self._views) and not self.canvas.image.isNull())
+            button.setEnabled(action.isEnabled())
 
     def _page(self) -> Request | None:
         """The present drawing on a page of its own; None where there is nothing to draw."""
@@ -197,16 +200,12 @@ class CurveWindow(QDialog):
         self.notice.show_words("")
         self._pause.start()
 
-    def _on_drawn(self, purpose: str, key: object, data: bytes) -> None:
-        if purpose == "file":
-            self.notice.show_words(curve_file.write(str(key), data))
-        elif purpose == "copy":
-            QGuiApplication.clipboard().setImage(QImage.fromData(data))
-            self.notice.show_words(labels.COPIED)
-        elif key is self._asked and isinstance(key, Request):
+    def _on_drawn(self, key: object, data: bytes) -> None:
+        if key is self._asked and isinstance(key, Request):
             image = QImage.fromData(data)
             image.setDevicePixelRatio(key.sheet.ratio)
             self.canvas.show_image(image)
+            self._show_enabled()
 
     def _on_view(self, key: object) -> None:
         self._wanted = str(key)
@@ -235,22 +234,19 @@ class CurveWindow(QDialog):
         if kind is None:
             self.notice.show_words(curve_file.unknown(path))
         elif page is not None:
-            self._draw("file", page, path, kind)
+            self.notice.show_words(curve_file.write(path, draw_curve(*page, kind)))
 
     def _on_copy(self) -> None:
         page = self._page()
         if page is not None:
-            self._draw("copy", page)
+            QGuiApplication.clipboard().setImage(QImage.fromData(draw_curve(*page)))
+            self.notice.show_words(labels.COPIED)
 
     # Qt's own
 
-    def showEvent(self, event: object) -> None:
-        super().showEvent(event)  # type: ignore[arg-type]
+    def showEvent(self, event: QShowEvent) -> None:
+        super().showEvent(event)
         self._pause.start()
-
-    def closeEvent(self, event: QCloseEvent) -> None:
-        self._worker.close()
-        super().closeEvent(event)
 
     def sizeHint(self) -> QSize:
         return SIZE

@@ -37,6 +37,7 @@ OWN_FONT = "DejaVu Sans"
 
 FOLDER_VARIABLE = "MPLCONFIGDIR"
 SHAPES: dict[Shape, str] = {"square": "s", "round": "o"}
+PARTS = ("backends.backend_agg", "backends.backend_pdf", "backends.backend_svg", "figure", "font_manager")
 SETTINGS = {
     "text.parse_math": False,  # a dollar sign in a label is a dollar sign
     "text.hinting": "none",
@@ -74,20 +75,16 @@ def draw_curve(
             figure.clear()
 
 
-def load() -> None:
-    """Load the library and its list of fonts, which takes a second or more the first time on a machine."""
-    with _one_at_a_time:
-        _load()
-
-
 @cache
 def _load() -> None:
+    """Load the library and its list of fonts, which takes a second or more the first time on a machine."""
     logging.getLogger("matplotlib").setLevel(logging.ERROR)
     with _own_cache():
         import matplotlib as mpl
 
-        for name in ("backends.backend_agg", "figure", "font_manager"):
+        for name in PARTS:
             import_module(f"matplotlib.{name}")
+        import_module("fontTools.subset")  # what a PDF needs, so that saving one does not wait for it
     mpl.rcdefaults()  # whatever a file of the user's says about other drawings
     for setting, value in SETTINGS.items():
         mpl.rcParams[setting] = value  # type: ignore[index]
