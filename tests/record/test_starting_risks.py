@@ -217,8 +217,7 @@ def patient(**changes: str) -> Patient:
     [
         ({"low_risk_text": "13%"}, "low_risk_text", "low-above-usual"),
         ({"high_risk_text": "11%"}, "high_risk_text", "high-below-usual"),
-        ({"low_risk_text": "30%"}, "low_risk_text", "low-above-high"),
-        ({"low_risk_text": "30%", "starting_risk_text": ""}, "low_risk_text", "low-above-high"),
+        ({"low_risk_text": "30%"}, "low_risk_text", "low-above-usual"),
         ({"low_risk_text": "many"}, "low_risk_text", "not-a-risk"),
         ({"high_risk_text": "120%"}, "high_risk_text", "risk-out-of-range"),
         ({"starting_risk_text": "0.12"}, "starting_risk_text", "percent-or-fraction"),
@@ -230,6 +229,26 @@ def test_three_risks_have_to_lie_in_their_order(changes: dict[str, str], field: 
     assert [(mark.field, mark.key, mark.used) for mark in reading.marks] == [(field, key, False)]
     unreadable = {"low_risk_text": reading.low, "high_risk_text": reading.high, "starting_risk_text": reading.usual}
     assert [name for name, each in unreadable.items() if isinstance(each, Unreadable)] == [field]
+
+
+def test_each_risk_that_is_out_of_order_is_marked() -> None:
+    """Low and high the wrong way round about the usual one are both of no use."""
+    reading = read_start(patient(start_kind="three", low_risk_text="30%", high_risk_text="0%"))
+    assert [(mark.field, mark.key) for mark in reading.marks] == [
+        ("low_risk_text", "low-above-usual"),
+        ("high_risk_text", "high-below-usual"),
+    ]
+
+
+@pytest.mark.parametrize("usual", ["", "many"])
+def test_without_a_usual_risk_nobody_knows_which_of_two_is_wrong(usual: str) -> None:
+    """Neither the low one nor the high one is used then."""
+    typed = patient(start_kind="three", low_risk_text="30%", starting_risk_text=usual)
+    reading = read_start(typed)
+    assert isinstance(reading.low, Unreadable)
+    assert isinstance(reading.high, Unreadable)
+    assert (reading.low.key, reading.high.key) == ("low-above-high", "high-below-low")
+    assert read_start(patient(start_kind="three", starting_risk_text=usual)).high == Proportion(value=0.2)
 
 
 def test_equal_risks_are_in_order() -> None:

@@ -54,6 +54,7 @@ MARK_KEYS = (
     "risk-of-nobody",
     "risk-of-everybody",
     "low-above-high",
+    "high-below-low",
     "low-above-usual",
     "high-below-usual",
     "not-a-share",

@@ -20,7 +20,8 @@ class StartReading(msgspec.Struct, frozen=True, kw_only=True):
     """The fields of one way of giving a starting risk; those of the other ways are blank.
 
     ``usual`` is the one risk, or the usual one of three. A low risk above the usual one, or a high one below it, is
-    unreadable. ``marks`` are those of all fields read, and those of a risk of 0 or 1, which is used.
+    unreadable; without a usual one both are, where the low one is above the high one. ``marks`` are those of all
+    fields read, and those of a risk of 0 or 1, which is used.
     """
 
     usual: RiskReading | Blank | Unreadable = Blank()
@@ -52,14 +53,21 @@ def read_start(patient: Patient) -> StartReading:
 def _in_order(
     patient: Patient, usual: RiskReading | Blank | Unreadable
 ) -> tuple[Proportion | Blank | Unreadable, Proportion | Blank | Unreadable]:
-    """The low and the high risk, unreadable where they lie on the wrong side of the usual one, or of each other."""
+    """The low and the high risk, unreadable where they lie on the wrong side of the usual one.
+
+    Where there is no usual one to tell which of the two is wrong, neither is used.
+    """
     low, high = read_risk(patient.low_risk_text), read_risk(patient.high_risk_text)
-    middle = usual.value if isinstance(usual, RiskReading) else None
-    if isinstance(low, Proportion) and isinstance(high, Proportion) and low.value > high.value:
-        return _wrong("low-above-high", patient.low_risk_text), high
-    if isinstance(low, Proportion) and middle is not None and low.value > middle:
+    if not isinstance(usual, RiskReading):
+        if isinstance(low, Proportion) and isinstance(high, Proportion) and low.value > high.value:
+            return (
+                _wrong("low-above-high", patient.low_risk_text),
+                _wrong("high-below-low", patient.high_risk_text),
+            )
+        return low, high
+    if isinstance(low, Proportion) and low.value > usual.value:
         low = _wrong("low-above-usual", patient.low_risk_text)
-    if isinstance(high, Proportion) and middle is not None and high.value < middle:
+    if isinstance(high, Proportion) and high.value < usual.value:
         high = _wrong("high-below-usual", patient.high_risk_text)
     return low, high
 
