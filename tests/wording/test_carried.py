@@ -7,6 +7,7 @@ import pytest
 
 from carried_patients import carried, effect, findings_with, with_counts
 from forms import at_time, effect_only, of_total, paired, person_time, strata
+from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Gap, Interval
 from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Patient
@@ -222,6 +223,39 @@ def test_the_adjusted_effect_beside_counts_keeps_its_level():
     words = patient_words(outcome, findings_with(outcome, patient), Choices(level=0.99), 100)
     assert "90% interval" in words.summary
     assert "90% interval" in words.with_interval
+
+
+def test_one_head_names_one_level():
+    """The study's own risk has its interval at the chosen level, so beside a print's other level it has none here."""
+    outcome = of_total(design="cohort", adjusted_text="OR 0.47 (90% CI 0.30 to 0.72)", adjusted_for_text="age")
+    found = appraise(outcome, Choices())
+    words = patient_words(outcome, found, Choices(), 100)
+    assert (words.without_interval, words.with_interval) == ("", "90% interval 6 to 13")
+    (row,) = patient_table(outcome, found, Choices(), 100)
+    assert (row.without, row.with_) == ("17", "9 (6 to 13)")
+    same = patient_words(outcome, appraise(outcome, Choices(level=0.9)), Choices(level=0.9), 100)
+    assert same.without_interval.startswith("90% interval ")
+
+
+def test_a_table_over_another_span_names_both_spans():
+    """The starting risk is one of the study's span, and the figures are over the other."""
+    outcome = of_total(patient=typed(other_span_text="5 years"))
+    found = appraise(outcome, Choices())
+    assert patient_table(outcome, found, Choices())[0].label == "12% over 12 months"
+    assert (
+        patient_table_head(outcome, found, Choices()).with_ == "With: night lights, over 5 years, in 100 (95% interval)"
+    )
+
+
+def test_a_rate_is_a_risk_over_any_span():
+    """Without a span of the study nothing is carried from one span to another."""
+    start = Patient(start_kind="rate", rate_text="12 per 1,000 person-years", other_span_text="10 years")
+    outcome = person_time(span_text="", patient=start)
+    words = patient_words(outcome, appraise(outcome, Choices()), Choices(), 100)
+    assert words.basis.startswith(
+        "Starting risk 11.31% (from 12 per 1,000 person-years over 10 years), rate ratio 0.54"
+    )
+    assert words.basis.endswith("kept constant.")
 
 
 LOW, HIGH = carried("risk_ratio", RR, 0.05, rank="low"), carried("risk_ratio", RR, 0.25, rank="high")

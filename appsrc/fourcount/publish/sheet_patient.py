@@ -6,9 +6,9 @@ from fourcount.appraisal.findings import Gap, OutcomeFindings, PatientFindings
 from fourcount.publish.sheet_rows import Row, figure_row, measure_row, text_row
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import exports, labels, limits, starts
+from fourcount.wording import exports, labels, limits, numbers, starts
 from fourcount.wording.basis import basis, range_note
-from fourcount.wording.form import patient_choices
+from fourcount.wording.form import patient_choices, shown_choices
 from fourcount.wording.gaps import gap_text
 
 
@@ -37,15 +37,18 @@ def _ranked(
 
 
 def _rows(patient: PatientFindings, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
+    shown, patient = patient_choices(findings, choices), starts.at_one_level(patient, choices)
     start, names, needed = starts.named(patient), exports.PATIENT_ROWS, patient.number_needed
     key, form = _key_of(patient, findings), findings.form
 
     def named(name: str) -> str:
         return exports.PATIENT.format(column=labels.COLUMNS["patient"], baseline=start, name=name)
 
-    rests = basis(outcome, patient, patient_choices(findings, choices))
+    own_level = shown.level != shown_choices(findings, choices).level
+    level = exports.LEVEL.format(level=numbers.level(shown.level)) if own_level else ""
+    rests = (basis(outcome, patient, shown), range_note(outcome, patient), level)
     return (
-        text_row(named(" ".join(part for part in (rests, range_note(outcome, patient)) if part))),
+        text_row(named(" ".join(part for part in rests if part))),
         figure_row(named(names["without"]), patient.without, key, form),
         figure_row(named(names["with"]), patient.with_, key, form),
         figure_row(named(names["difference"]), patient.difference, key, form),

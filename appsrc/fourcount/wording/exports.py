@@ -41,6 +41,7 @@ PAIRS_WITH_EVENT = "{pairs}, {event}: {where}"
 PER_UNIT = "Rates and their difference are events in one unit of time ({unit})."
 CONVERTED = "Odds ratio as a risk ratio at {baseline}"
 PATIENT = "{column}, {baseline}: {name}"
+LEVEL = "Level {level}."
 PATIENT_RANK = "{column}, {rank} starting risk"
 PATIENT_ROWS = {
     "without": "risk without",

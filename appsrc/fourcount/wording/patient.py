@@ -70,6 +70,7 @@ def patient_words(
         why = why_no_patient(patient, findings.form, next(iter(findings.measures), ""))
         return PatientWords(without_title=without_title, with_title=with_title, detail=why, missing=missing(outcome))
     people = denominator or people_of(patient)
+    patient = starts.at_one_level(patient, choices)
     choices = patient_choices(findings, choices)
     change = patient.difference.estimate
     return PatientWords(

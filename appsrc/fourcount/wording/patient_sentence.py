@@ -19,6 +19,7 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
     patient = findings.patient
     if isinstance(patient, Gap):
         return ""
+    patient = starts.at_one_level(patient, choices)
     choices = patient_choices(findings, choices)
     people = people_of(patient)
     ranks = rank_lines(outcome, findings, choices, people)

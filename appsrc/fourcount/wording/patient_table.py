@@ -7,7 +7,7 @@ from typing import NamedTuple
 from fourcount.appraisal.findings import Gap, OutcomeFindings, PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import carried, limits, names, numbers, starts
+from fourcount.wording import carried, limits, names, numbers, spans, starts
 from fourcount.wording.form import patient_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.patient import titles
@@ -32,7 +32,7 @@ class Row(NamedTuple):
 
 
 def patient_table(
-    _outcome: Outcome, findings: OutcomeFindings, _choices: Choices, denominator: int | None = None
+    _outcome: Outcome, findings: OutcomeFindings, choices: Choices, denominator: int | None = None
 ) -> list[Row]:
     """``12%: 12, 6 (4 to 9), 6 fewer (3 to 8), NNTB 19 (14 to 38)``: low, usual and high in this order, or the one row.
 
@@ -42,7 +42,7 @@ def patient_table(
     usual = findings.patient
     if isinstance(usual, Gap):
         return []
-    people = people_of(usual, denominator)
+    people, usual = people_of(usual, denominator), starts.at_one_level(usual, choices)
     ranked = (("low", usual.low), ("", usual), ("high", usual.high))
     return [_row(rank, one, findings, people) for rank, one in ranked if one is not None]
 
@@ -50,14 +50,15 @@ def patient_table(
 def patient_table_head(
     outcome: Outcome, findings: OutcomeFindings, choices: Choices, denominator: int | None = None
 ) -> Row:
-    """What the columns are: ``With: night lights, in 100 (95% interval)``."""
+    """What the columns are: ``With: night lights, in 100 (95% interval)``; another time span is named here too."""
     patient = findings.patient
     without, with_ = titles(outcome)
     start = START.format(risk=names.risk_name(outcome))
     if isinstance(patient, Gap):
         return Row(start, without, with_, DIFFERENCE, NUMBER_NEEDED)
     level = limits.interval_name(patient_choices(findings, choices).level)
-    counted = f", in {numbers.whole(people_of(patient, denominator))} ({level})"
+    span = "" if patient.other_span is None else f", {spans.over(outcome, patient)}"
+    counted = f"{span}, in {numbers.whole(people_of(patient, denominator))} ({level})"
     needed = f"{NUMBER_NEEDED} ({level})"
     return Row(start, f"{without}{counted}", f"{with_}{counted}", f"{DIFFERENCE}{counted}", needed)
 

@@ -29,7 +29,9 @@ def within(outcome: Outcome, patient: PatientFindings) -> str:
 
 def carried_to(patient: PatientFindings) -> str:
     """``carried to 5 years as if hazards stayed constant``, or "" at the study's own span."""
-    return "" if patient.other_span is None else CARRIED_TO.format(other=duration(patient.other_span))
+    if patient.other_span is None or patient.study_span is None:
+        return ""  # a rate is a risk over any span without being carried
+    return CARRIED_TO.format(other=duration(patient.other_span))
 
 
 def of_the_start(patient: PatientFindings) -> str:

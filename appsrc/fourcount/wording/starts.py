@@ -2,7 +2,9 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.findings import Gap, PatientFindings
+import msgspec
+
+from fourcount.appraisal.findings import Figure, Gap, PatientFindings
 from fourcount.record.entry.readings import Blank, Proportion, RiskReading, Unreadable
 from fourcount.record.entry.risk import read_risk
 from fourcount.record.entry.starting import read_share, read_starting_risk
@@ -43,9 +45,22 @@ def value(patient: PatientFindings) -> str:
 
 
 def named(patient: PatientFindings) -> str:
-    """``12%``, ``low, 5%``, ``the study’s own, 17.1%``."""
+    """``12%``, ``low, 5%``, ``the study’s own, 17.1%``; over the study's span where the figures are over another."""
     name = OWN_ROW if own(patient) else RANKS.get(patient.rank, "")
-    return f"{name}, {value(patient)}" if name else value(patient)
+    risk = f"{value(patient)}{spans.of_the_start(patient)}"
+    return f"{name}, {risk}" if name else risk
+
+
+def at_one_level(patient: PatientFindings, choices: Choices) -> PatientFindings:
+    """The patient with the intervals that have one level.
+
+    The study's own starting risk has an interval at the level chosen for the table; beside an effect that keeps the
+    level of its print it is left out, since one head names one level.
+    """
+    if not own(patient) or patient.range_from != "effect" or patient.level == choices.level:
+        return patient
+    bare = Figure(estimate=patient.without.estimate, interval=Gap("bare-starting-risk"), method="")
+    return msgspec.structs.replace(patient, without=bare)
 
 
 def given(outcome: Outcome, patient: PatientFindings, choices: Choices) -> str:
