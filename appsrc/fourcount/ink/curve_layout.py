@@ -195,7 +195,7 @@ class CurveLayout:
         positive = [value for value in (*values, odds, 1.0) if not isinstance(value, Gap) and value > 0]
         low, high = curve_axes.ratio_ends(min(positive), max(positive))
         rounds = curve_axes.ratio_marks(low, high)
-        return Marks(low, high, rounds, tuple(f"{value:g}" for value in rounds))
+        return Marks(low, high, rounds, tuple(numbers.quantity(value) for value in rounds))
 
     def _values(self, line: CurveLine) -> list[float]:
         found = [point.value for point in line.points]

@@ -1,0 +1,149 @@
+"""Effects across starting risks: the printed effect at every one, nothing cut, the points where they belong."""
+
+from __future__ import annotations
+
+from collections.abc import Callable
+
+import msgspec
+import pytest
+from hypothesis import given
+from hypothesis import strategies as st
+
+from drawn_forms import outcomes
+from fourcount.appraisal.appraise import appraise
+from fourcount.appraisal.curve import curve
+from fourcount.appraisal.findings import Carriable, Figure, Gap, Interval, OutcomeFindings
+from fourcount.appraisal.findings.curve import Curve, CurveLine, CurvePoint
+from fourcount.record.paper import Choices
+
+
+def lines(drawn: Curve) -> dict[str, CurveLine]:
+    return {line.effect.effect: line for line in drawn.lines}
+
+
+def at(line: CurveLine, start: float) -> CurvePoint:
+    return min(line.points, key=lambda point: abs(point.start - start))
+
+
+def carrying(findings: OutcomeFindings, effect: str, estimate: float, low: float, high: float) -> OutcomeFindings:
+    """The same findings with one effect alone to carry."""
+    figure = Figure(estimate=estimate, interval=Interval(low=low, high=high), method="printed")
+    one = Carriable(effect=effect, measure=effect, figure=figure)  # type: ignore[arg-type]
+    return msgspec.structs.replace(findings, carriable=(one,))
+
+
+def test_every_effect_passes_through_the_study(appraised: Callable[..., OutcomeFindings]) -> None:
+    """At the reference group's own risk each crude effect gives back the index group's risk."""
+    drawn = curve(appraised(38, 374, 70, 339))
+    assert set(lines(drawn)) == {"risk_ratio", "odds_ratio", "risk_difference"}
+    for line in drawn.lines:
+        assert at(line, 70 / 409).value == pytest.approx(38 / 412, abs=1e-12)
+    assert (drawn.marks[0].without, drawn.marks[0].with_) == (70 / 409, 38 / 412)
+
+
+def test_an_odds_ratio_is_the_risk_ratio_that_was_published(appraised: Callable[..., OutcomeFindings]) -> None:
+    """RR = OR / (1 - P0 + P0 OR): an odds ratio of 2.5 at 50% is 1.43 (Zhang and Yu 1998's formula, by hand)."""
+    findings = carrying(appraised(38, 374, 70, 339, baseline="50%"), "odds_ratio", 2.5, 1.5, 4.0)
+    drawn = curve(findings, whole=True)
+    (ratio,) = drawn.ratios
+    point = at(ratio, 0.5)
+    assert [point.value, point.low, point.high] == pytest.approx([2.5 / 1.75, 1.5 / 1.25, 4 / 2.5])
+    assert at(ratio, 0.0).value == 2.5
+    assert at(ratio, 1.0).value == 1.0
+
+
+def test_risk_with_and_risk_ratio_are_two_views_of_one(appraised: Callable[..., OutcomeFindings]) -> None:
+    """The odds ratio's risk with is its risk ratio times the starting risk, everywhere."""
+    drawn = curve(appraised(60, 140, 22, 178), whole=True)
+    risks, (ratios,) = lines(drawn)["odds_ratio"], drawn.ratios
+    for risk, ratio in zip(risks.points, ratios.points, strict=True):
+        assert risk.start == ratio.start
+        assert risk.value == pytest.approx(ratio.value * ratio.start, abs=1e-12)
+
+
+def test_a_line_ends_where_it_reaches_100(appraised: Callable[..., OutcomeFindings]) -> None:
+    """A risk ratio of 2.5 reaches 100% at 40%; beyond that there is a gap, and below the end no value above 1."""
+    findings = carrying(appraised(38, 374, 70, 339), "risk_ratio", 2.5, 2.0, 4.0)
+    (line,) = curve(findings, whole=True).lines
+    assert (line.first, line.last) == (0.0, 0.4)
+    assert at(line, 0.4).value == pytest.approx(1.0)
+    assert at(line, 0.25).high == pytest.approx(1.0)
+    beyond = [point for point in line.points if point.start > 0.4]
+    assert beyond
+    assert all(point.value == Gap("beyond-one") for point in beyond)
+    assert all(isinstance(point.low, float) for point in line.points if point.start <= 0.5)
+
+
+def test_a_difference_begins_where_it_leaves_nobody(appraised: Callable[..., OutcomeFindings]) -> None:
+    """Ten fewer in 100 give no risk below a starting risk of 10%, and no limit is cut there either."""
+    findings = carrying(appraised(38, 374, 70, 339), "risk_difference", -0.1, -0.2, 0.05)
+    (line,) = curve(findings, whole=True).lines
+    assert (line.first, line.last) == (0.1, 1.0)
+    assert at(line, 0.1).value == 0.0
+    below = [point for point in line.points if point.start < 0.1]
+    assert below
+    assert all(point.value == Gap("carried-beyond-zero") for point in below)
+    assert at(line, 0.15).low == Gap("carried-beyond-zero")
+
+
+def test_a_patient_stands_on_the_line_that_is_carried(appraised: Callable[..., OutcomeFindings]) -> None:
+    """The mark is what column three says: starting risk, risk with, and its limits."""
+    findings = appraised(38, 374, 70, 339, baseline="12%", effect="odds_ratio")
+    drawn = curve(findings)
+    patient = findings.patient
+    mark = drawn.marks[1]
+    assert (mark.without, mark.with_, mark.of_study) == (0.12, patient.with_.estimate, False)
+    assert (mark.low, mark.high) == (patient.with_.interval.low, patient.with_.interval.high)
+    assert drawn.lines[drawn.carried].effect.effect == "odds_ratio"
+    assert at(drawn.lines[drawn.carried], 0.12).value == mark.with_
+
+
+def test_the_study_and_its_own_patient_are_one_point(appraised: Callable[..., OutcomeFindings]) -> None:
+    """Without a typed starting risk one mark stands for both, with the table's own limits."""
+    findings = appraised(38, 374, 70, 339)
+    (mark,) = curve(findings).marks
+    assert mark.of_study
+    assert mark.of_patient
+    assert mark.low == findings.measures["risk_index"].interval.low
+
+
+def test_a_case_control_study_has_no_point_of_its_own(appraised: Callable[..., OutcomeFindings]) -> None:
+    """Its totals are no risks: the patient's point alone is marked, and the odds ratio alone drawn."""
+    drawn = curve(appraised(60, 40, 30, 70, design="case-control", baseline="2%"))
+    assert [mark.of_study for mark in drawn.marks] == [False]
+    assert set(lines(drawn)) == {"odds_ratio"}
+
+
+@pytest.mark.parametrize(("baseline", "reach"), [("2%", 0.5), ("12%", 0.5), ("30%", 1.0), ("100%", 1.0)])
+def test_the_axis_holds_twice_every_point(
+    appraised: Callable[..., OutcomeFindings], baseline: str, reach: float
+) -> None:
+    """It goes to a round risk of at least twice the study's 17.1% and the patient's own."""
+    assert curve(appraised(38, 374, 70, 339, baseline=baseline)).reach == pytest.approx(reach)
+
+
+def test_an_effect_without_end_has_no_line(appraised: Callable[..., OutcomeFindings]) -> None:
+    """Where nobody of the reference group had the event, the ratios are named as left out, the difference drawn."""
+    drawn = curve(appraised(5, 95, 0, 100))
+    assert {one.effect for one in drawn.left_out} >= {"risk_ratio", "odds_ratio"}
+    assert set(lines(drawn)) == {"risk_difference"}
+    assert drawn.ratios == ()
+
+
+def test_nothing_typed_draws_nothing(appraised: Callable[..., OutcomeFindings]) -> None:
+    """An empty table has no line and no point."""
+    drawn = curve(appraised("", "", "", ""))
+    assert (drawn.lines, drawn.ratios, drawn.marks) == ((), (), ())
+
+
+@given(outcomes(), st.booleans())
+def test_whatever_is_typed_no_risk_leaves_its_bounds(outcome: object, whole: bool) -> None:
+    """Every value is a risk from 0 to 1 or a gap, the estimate lies between its limits, and points are in order."""
+    drawn = curve(appraise(outcome, Choices()), whole=whole)  # type: ignore[arg-type]
+    for line in drawn.lines:
+        starts = [point.start for point in line.points]
+        assert starts == sorted(set(starts))
+        for point in line.points:
+            values = [value for value in (point.low, point.value, point.high) if not isinstance(value, Gap)]
+            assert all(0.0 <= value <= 1.0 for value in values)
+            assert values == pytest.approx(sorted(values), abs=1e-9)
