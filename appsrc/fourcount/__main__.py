@@ -21,6 +21,10 @@ if TYPE_CHECKING:
 
 COUNTS_NEEDED = 4
 GOOD, FAILED, MISTYPED = 0, 1, 2
+WISHES = (
+    "low", "high", "rate", "overall", "exposed", "effect", "span", "other_span", "adjusted", "margin", "matters",
+)  # fmt: skip
+"""The options of a patient and of a line of one's own beside the starting risk."""
 
 _MINUS_NUMBER = re.compile(r"-[0-9.,]")
 
@@ -44,6 +48,10 @@ def _run(given: list[str]) -> int:
         return _open_window()
     if given[0] == "answer":
         return _answer(given[1:])
+    if given[0] == "handout":
+        from fourcount.face.handout_command import run
+
+        return run(given[1:])
     if given[0] in ("--help", "-h", "--version") and len(given) > 1:
         raise MistypedError(words.TOO_MANY.format(option=given[0]))
     if given[0] in ("--help", "-h"):
@@ -62,6 +70,8 @@ def _answer(given: list[str]) -> int:
         return _say(f"fourcount {__version__}\n")
     if unknown:
         raise MistypedError(words.UNKNOWN.format(kind="option", text=_quoted(unknown[0])))
+    if len(wanted.counts) == 1:
+        return _answer_file(wanted, given)
     question = _question(wanted)
     from fourcount.appraisal.appraise import appraise
     from fourcount.record.outcome import PAIRED_DESIGNS
@@ -81,6 +91,25 @@ def _answer(given: list[str]) -> int:
     light = choices.family != "exact" and outcome.design not in PAIRED_DESIGNS
     findings = appraise(outcome, choices, deferring=light)
     return _say(_printed(question) + listing(outcome, findings, choices))
+
+
+def _answer_file(wanted: Namespace, given: list[str]) -> int:
+    """The same of every outcome of a record, which has its own design, choices and patient."""
+    option = next((word for word in given if word.startswith("-") and word != "--json"), None)
+    if option is not None:
+        raise MistypedError(words.ONLY_JSON.format(option=_quoted(option)))
+    from fourcount.publish.files import read_file
+
+    record = read_file(wanted.counts[0])
+    if isinstance(record, str):
+        raise MistypedError(record)
+    from fourcount.publish.answer_file import file_json, file_listing
+
+    if wanted.json:
+        import json
+
+        return _say(json.dumps(file_json(record), indent=2, allow_nan=False) + "\n")
+    return _say(file_listing(record))
 
 
 def _printed(question: Question) -> str:
@@ -108,6 +137,7 @@ def _question(wanted: Namespace) -> Question:
             baseline=wanted.baseline,
             unwelcome=not wanted.welcome,
             printed=wanted.printed,
+            **{name: getattr(wanted, name) for name in WISHES},
         )
     except ValueError as mistake:
         raise MistypedError(str(mistake)) from None
@@ -163,8 +193,8 @@ def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
     parser.add_argument("--design", default="trial")
     parser.add_argument("--level", default="95")
     parser.add_argument("--intervals", default="score")
-    parser.add_argument("--baseline")
-    parser.add_argument("--printed")
+    for option in ("baseline", "printed", *WISHES):
+        parser.add_argument(f"--{option.replace('_', '-')}")
     for switch in ("--welcome", "--json", "--version"):
         parser.add_argument(switch, action="store_true")
     parser.add_argument("--help", "-h", action="store_true")

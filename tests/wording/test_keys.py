@@ -205,7 +205,7 @@ def test_a_case_control_study_rests_on_two_assumptions():
     facts: dict[str, str | float] = {"baseline": 0.12, "effect": "odds_ratio"}
     assert cautions.caution_text(Caution(key="rests-on-baseline", facts=facts)) == (
         "Every risk, difference and number needed here rests on the starting risk of 12%, which is not from this "
-        "study, and on the effect being the same there."
+        "study, and on the odds ratio being the same there."
     )
 
 

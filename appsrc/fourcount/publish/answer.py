@@ -4,16 +4,14 @@ from __future__ import annotations
 
 import operator
 import reprlib
-from dataclasses import dataclass
-from decimal import Decimal
+from dataclasses import dataclass, field, fields
 from numbers import Real
 from typing import cast
 
 from fourcount.appraisal.appraise import appraise
+from fourcount.publish.asked_patient import Wishes, with_wishes
 from fourcount.publish.contract import contract
 from fourcount.record.entry.cell import LARGEST_COUNT
-from fourcount.record.entry.readings import Blank, Unreadable
-from fourcount.record.entry.risk import read_risk
 from fourcount.record.outcome import (
     CELLS,
     DESIGNS,
@@ -23,11 +21,9 @@ from fourcount.record.outcome import (
     Outcome,
     Pairs,
     PaperMeasure,
-    Patient,
 )
 from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family
 from fourcount.wording import command as words
-from fourcount.wording.gaps import mark_text
 
 COUNT_NAMES = ("index events", "index non-events", "reference events", "reference non-events")
 PAIR_NAMES = ("pairs with both", "pairs with the index side only", "pairs with the reference side only", "other pairs")
@@ -43,30 +39,35 @@ class Question:
     design: Design
     level: float
     intervals: Family
-    baseline_text: str
     unwelcome: bool
     printed_text: str = ""
+    wishes: Wishes = field(default_factory=Wishes)
+
+    @property
+    def baseline_text(self) -> str:
+        """The starting risk as a reader would have typed it."""
+        return self.outcome.patient.starting_risk_text
 
     @property
     def outcome(self) -> Outcome:
         """The outcome that a reader would have typed: the index group first, the events left; pairs both first."""
         cells = dict(zip(CELLS, map(str, self.counts), strict=True))
         measure: PaperMeasure = "odds_ratio" if self.design in ODDS_RATIO_DESIGNS else "risk_ratio"
-        return Outcome(
+        plain = Outcome(
             table=Pairs(**cells) if self.design in PAIRED_DESIGNS else EventsAndOthers(**cells),
             design=self.design,
             left_welcome=not self.unwelcome,
-            patient=Patient(starting_risk_text=self.baseline_text),
             paper_measure=measure,
             paper_text=self.printed_text,
         )
+        return with_wishes(plain, self.wishes, shown)
 
     @property
     def choices(self) -> Choices:
         return Choices(family=self.intervals, level=self.level)
 
 
-def answer(  # noqa: PLR0913 - four counts, and five choices by name
+def answer(  # noqa: PLR0913 - four counts, and six choices by name
     index_events: int,
     index_non_events: int,
     reference_events: int,
@@ -78,6 +79,7 @@ def answer(  # noqa: PLR0913 - four counts, and five choices by name
     baseline: float | str | None = None,
     unwelcome: bool = True,
     printed: str | None = None,
+    **wishes: object,
 ) -> dict[str, object]:
     """Everything that four counts say, as plain dictionaries, lists, numbers and strings.
 
@@ -93,12 +95,29 @@ def answer(  # noqa: PLR0913 - four counts, and five choices by name
     intervals : {"score", "textbook", "exact"}
         The family whose intervals stand under ``measures``; ``methods`` holds all of them.
     baseline : float, str or None
-        A starting risk from outside the study: a fraction from 0 to 1, or a text such as "12%" or "12 in 100".
+        A starting risk from outside the study: a fraction from 0 to 1, or a text such as "12%", "12% (9 to 15)" or
+        "24 of 200".
     unwelcome : bool
         Whether the event is a bad one, which decides between NNTB and NNTH.
     printed : str or None
         What the paper prints as the result of these counts, such as "RR 1.50 (1.12 to 2.01)". The ways in which it
         follows from them are listed under ``printed``, what is said of it under ``check``.
+    low, high : float, str or None
+        A low and a high starting risk beside the usual one, ``baseline``.
+    rate : str or None
+        In place of a starting risk, a rate such as "12 per 1,000 person-years", over ``span``.
+    overall, exposed : float, str or None
+        In place of a starting risk, the risk of all people and the share of them who have the exposure.
+    effect : str or None
+        The effect to carry: "risk_ratio", "odds_ratio", "risk_difference", "adjusted" and so on; the usual one if None.
+    adjusted : str or None
+        An adjusted effect that the paper prints, of the index group against the reference group, such as
+        "OR 0.49 (0.32 to 0.75)".
+    span, other_span : str or None
+        The study's time span, such as "12 months", and another one to carry the risks to.
+    margin, matters : str or None
+        A margin, or the smallest difference that would matter: "RD 2% more", "RR 1.25". Where the interval lies
+        against it stands under ``line``.
 
     Raises
     ------
@@ -113,6 +132,7 @@ def answer(  # noqa: PLR0913 - four counts, and five choices by name
         baseline=baseline,
         unwelcome=unwelcome,
         printed=printed,
+        **wishes,
     )
     outcome, choices = question.outcome, question.choices
     return {**contract(outcome, choices, appraise(outcome, choices)), **checked(question)}
@@ -137,27 +157,33 @@ def asked(
     baseline: object,
     unwelcome: object,
     printed: object = None,
+    **wishes: object,
 ) -> Question:
     """The question, each part of it checked; ValueError with one plain sentence otherwise."""
     names = PAIR_NAMES if design in PAIRED_DESIGNS else COUNT_NAMES
     whole = tuple(_count(value, name) for value, name in zip(counts, names, strict=True))
     if not isinstance(design, str) or design not in DESIGNS:
-        raise ValueError(words.ONE_OF.format(name="design", allowed=", ".join(DESIGNS), given=_shown(design)))
+        raise ValueError(words.ONE_OF.format(name="design", allowed=", ".join(DESIGNS), given=shown(design)))
     if not isinstance(intervals, str) or intervals not in FAMILIES:
-        raise ValueError(words.ONE_OF.format(name="intervals", allowed=", ".join(FAMILIES), given=_shown(intervals)))
+        raise ValueError(words.ONE_OF.format(name="intervals", allowed=", ".join(FAMILIES), given=shown(intervals)))
     if not isinstance(unwelcome, bool):
-        raise ValueError(words.NOT_A_TRUTH.format(given=_shown(unwelcome)))
+        raise ValueError(words.NOT_A_TRUTH.format(given=shown(unwelcome)))
     if printed is not None and not isinstance(printed, str):
-        raise ValueError(words.NOT_A_PRINT.format(given=_shown(printed)))
-    return Question(
+        raise ValueError(words.NOT_A_PRINT.format(given=shown(printed)))
+    unknown = wishes.keys() - {one.name for one in fields(Wishes)}
+    if unknown:
+        raise TypeError(words.NO_SUCH_ARGUMENT.format(name=min(unknown)))
+    question = Question(
         counts=whole,
         design=design,
         level=_level(level),
         intervals=intervals,
-        baseline_text=_baseline_text(baseline),
         unwelcome=unwelcome,
         printed_text=printed or "",
+        wishes=Wishes(baseline=baseline, **wishes),
     )
+    _ = question.outcome  # whatever is wished for is refused here and now
+    return question
 
 
 def _count(value: object, name: str) -> int:
@@ -167,35 +193,18 @@ def _count(value: object, name: str) -> int:
     except TypeError:
         count = -1
     if not 0 <= count <= LARGEST_COUNT:
-        raise ValueError(words.NOT_A_COUNT.format(name=name, largest=f"{LARGEST_COUNT:,}", given=_shown(value)))
+        raise ValueError(words.NOT_A_COUNT.format(name=name, largest=f"{LARGEST_COUNT:,}", given=shown(value)))
     return count
 
 
 def _level(level: object) -> float:
     usable = isinstance(level, Real) and not isinstance(level, bool)
     if not usable or not LOWEST_LEVEL <= cast(float, level) <= HIGHEST_LEVEL:
-        raise ValueError(words.NOT_A_LEVEL.format(low=f"{LOWEST_LEVEL:.2f}", high=HIGHEST_LEVEL, given=_shown(level)))
+        raise ValueError(words.NOT_A_LEVEL.format(low=f"{LOWEST_LEVEL:.2f}", high=HIGHEST_LEVEL, given=shown(level)))
     return float(cast(float, level))
 
 
-def _baseline_text(baseline: object) -> str:
-    """The starting risk as a reader would type it; a fraction is written so that it reads back as the same number."""
-    if baseline is None:
-        return ""
-    if isinstance(baseline, str):
-        reading = read_risk(baseline)
-        if isinstance(reading, Unreadable):
-            raise ValueError(words.UNUSABLE_BASELINE.format(reason=mark_text(reading)))
-        if isinstance(reading, Blank):
-            raise ValueError(words.NO_BASELINE)
-        return baseline
-    usable = isinstance(baseline, Real) and not isinstance(baseline, bool)
-    if not usable or not 0 <= cast(float, baseline) <= 1:
-        raise ValueError(words.NOT_A_BASELINE.format(given=_shown(baseline)))
-    return f"{Decimal(repr(float(cast(float, baseline)))).scaleb(2):f}%"
-
-
-def _shown(value: object) -> str:
+def shown(value: object) -> str:
     """What was given, short enough for a sentence. Python refuses to write out a whole number of great length."""
     if isinstance(value, int) and abs(value) > 10**40:
         return words.HUGE if value > 0 else words.HUGE_BELOW_ZERO

@@ -162,6 +162,9 @@ def _conversion(study: Study, start: Start | Gap, patient: PatientFindings | Gap
         )
     if isinstance(patient, PatientFindings) and patient.carried is odds_ratio.figure and patient.other_span is None:
         return Conversion(baseline=patient.baseline, baseline_from="given", risk_ratio=patient.risk_ratio)
+    if start.share is not None and isinstance(patient, PatientFindings):
+        # Each effect solves for a starting risk of its own, and the patient has one.
+        start = Start(value=patient.baseline, origin="overall")
     found = carried_to(odds_ratio, start)
     if isinstance(found.baseline, Gap):
         return found.baseline
