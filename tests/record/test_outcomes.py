@@ -201,6 +201,13 @@ def test_counting_the_other_outcome_turns_every_risk() -> None:
     )
 
 
+@pytest.mark.parametrize(("rate", "kind"), [("12 per 1,000 person-years", "one"), ("often", "one"), (" ", "rate")])
+def test_a_rate_of_one_event_is_never_taken_for_the_other_s(rate: str, kind: str) -> None:
+    """It stays typed, and the starting risk is a risk again."""
+    turned = editing.count_other_outcome(Outcome(patient=Patient(start_kind="rate", rate_text=rate))).patient
+    assert (turned.rate_text, turned.start_kind) == (rate, kind)
+
+
 @pytest.mark.parametrize(("low", "high"), [("5%", ""), ("", "20%"), ("many", "20%"), ("5%", "?"), ("", "")])
 def test_counting_twice_gives_back_what_cannot_be_read(low: str, high: str) -> None:
     """A blank and an unreadable text change places with their neighbour, twice."""

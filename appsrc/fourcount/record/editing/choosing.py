@@ -42,13 +42,14 @@ def count_other_outcome(outcome: Outcome) -> Outcome:
 
     70% who heal are 30% who do not. So each starting risk, and an overall one, becomes its complement in the same style
     of writing, and the low one of three becomes the high one; text that gives no risk stays as it is. The reader's own
-    line changes sides. A rate stays: no rate of the other outcome follows from it. Counting twice gives an equal
-    outcome. Person-time has events and no other outcome, so nothing happens there.
+    line changes sides. A rate stays typed but is used no longer, since it is of the one event and says nothing of the
+    other outcome: the starting risk is a risk again. Without one, counting twice gives an equal outcome. Person-time
+    has events and no other outcome, so nothing happens there.
     """
     if isinstance(outcome.table, PersonTime):
         return outcome
     counted: Column = "right" if outcome.counted == "left" else "left"
-    return replace(line_turned(outcome), counted=counted, patient=_of_the_other(outcome.patient))
+    return replace(line_turned(outcome), counted=counted, patient=_of_the_other(_without_rate(outcome.patient)))
 
 
 def _of_the_other(patient: Patient) -> Patient:
@@ -64,6 +65,11 @@ def _of_the_other(patient: Patient) -> Patient:
     from fourcount.record.entry.complement import complement_text  # the window starts without the readers
 
     return replace(patient, **{field: complement_text(text) if text else "" for field, text in texts.items()})
+
+
+def _without_rate(patient: Patient) -> Patient:
+    """The patient with a starting risk in place of a rate that has been typed."""
+    return replace(patient, start_kind="one") if patient.start_kind == "rate" and patient.rate_text.strip() else patient
 
 
 def clear_table(outcome: Outcome) -> Outcome:
