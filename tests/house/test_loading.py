@@ -3,8 +3,10 @@
 from __future__ import annotations
 
 import json
+import os
 import subprocess
 import sys
+from pathlib import Path
 
 PROBE = "import json, sys; print(json.dumps(sorted(globals().get('loaded', sys.modules))))"
 PAINTED = """
@@ -92,3 +94,13 @@ def test_a_curve_loads_its_library_when_it_is_drawn() -> None:
     loaded = loaded_after(CURVE)
     assert "matplotlib.figure" in loaded
     assert not loaded & {"matplotlib.pyplot", "tkinter", "scipy.stats", "matplotlib.backends.backend_qtagg"}
+
+
+def test_a_curve_needs_no_folder_to_write_to(tmp_path: Path) -> None:
+    """Where the list of fonts can be kept nowhere, a curve is drawn all the same and nothing is said."""
+    blocked = tmp_path / "a file, not a folder"
+    blocked.write_text("", encoding="utf-8")
+    environ = {**os.environ, "XDG_CACHE_HOME": str(blocked / "cache"), "HOME": str(blocked)}
+    environ.pop("MPLCONFIGDIR", None)
+    run = subprocess.run([sys.executable, "-c", CURVE], capture_output=True, text=True, check=False, env=environ)
+    assert (run.returncode, run.stdout, run.stderr) == (0, "", "")

@@ -123,7 +123,7 @@ def curve_words(record: Record, outcome: Outcome, findings: OutcomeFindings, cur
         itself=ODDS_ITSELF.format(name=carriable_name(outcome, lines[0].effect)) if view.ratios else "",
         names=tuple(_line_name(outcome, line, view, curve) for line in lines),
         marks=tuple(_mark_name(mark) for mark in curve.marks),
-        sentence=" ".join(_at(outcome, curve, view, mark) for mark in curve.marks),
+        sentence=" ".join(_at(outcome, curve, view, mark) for mark in curve.marks or _middle(curve)) if lines else "",
         notes=_notes(outcome, findings, curve, view),
     )
 
@@ -186,6 +186,13 @@ def _mark_name(mark: CurveMark) -> str:
 
 def _start(mark: CurveMark) -> str:
     return numbers.percent(mark.without) if mark.of_study else numbers.percent_given(mark.without)
+
+
+def _middle(curve: Curve) -> tuple[CurveMark]:
+    """Where no point is marked, the middle of the axis is told."""
+    none = Gap("bare-starting-risk")
+    start = curve.reach / 2
+    return (CurveMark(of_study=False, of_patient=False, rank="", without=start, with_=none, low=none, high=none),)
 
 
 def _at(outcome: Outcome, curve: Curve, view: View, mark: CurveMark) -> str:
