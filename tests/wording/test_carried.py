@@ -13,9 +13,10 @@ from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
 from fourcount.wording.basis import basis
-from fourcount.wording.patient import patient_words
+from fourcount.wording.patient import missing, patient_words
 from fourcount.wording.patient_sentence import AS_IN_THE_STUDY, patient_sentence
 from fourcount.wording.patient_table import patient_table, patient_table_head
+from fourcount.wording.subject import subject
 
 RR, OR, HR = effect(0.54, 0.37, 0.78), effect(0.49, 0.32, 0.75), effect(0.72, 0.55, 0.92)
 UP, RD = effect(1.86, 1.29, 2.69), effect(-0.079, -0.126, -0.033)
@@ -370,6 +371,35 @@ def test_a_matched_study_is_turned_to_those_who_had_the_exposure():
     turned = msgspec.structs.replace(outcome, index_group="second")
     assert words_of(turned, patient).with_title == "People who did not take the drug"
     assert words_of(msgspec.structs.replace(turned, counted="right"), patient).with_title == "People who took the drug"
+
+
+@pytest.mark.parametrize(
+    ("label", "event"),
+    [
+        ("", "became cases"),
+        ("Cases", "became cases"),
+        ("Hip fractures", "had hip fractures"),
+        ("Stroke cases", "had the event “stroke”"),
+        ("Cases of stroke", "had the event “stroke”"),
+    ],
+)
+def test_cases_are_called_after_what_they_had(label, event):
+    """By the label that the reader gave them."""
+    outcome = paired("matched", first_label_text=label, second_label_text="", left_words_text="took the drug")
+    assert subject(outcome).left_words_text == event
+
+
+def test_a_matched_study_has_to_name_the_exposure_and_the_event():
+    """ "Became cases" says nothing to a patient, nor "were exposed"."""
+    bare = {"first_label_text": "", "second_label_text": "", "left_words_text": "", "right_words_text": ""}
+    assert missing(paired("matched", **bare)) == ("the event", "the reference group", "the index group")
+    named = {**bare, "first_label_text": "Hip fractures", "left_words_text": "was treated"}
+    assert missing(paired("matched", **named)) == ()
+    spoken = subject(paired("matched", **named))
+    assert (spoken.first_label_text, spoken.second_label_text) == (
+        "people who were treated",
+        "people who were not treated",
+    )
 
 
 def test_before_and_after_are_times():

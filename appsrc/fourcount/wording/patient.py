@@ -14,7 +14,7 @@ from fourcount.wording.gaps import why_no_patient
 from fourcount.wording.headline import DO_NOT_ADD_UP
 from fourcount.wording.picture_sentence import WHICH_PEOPLE, others, picture_sentence
 from fourcount.wording.ranks import people_of, rank_lines
-from fourcount.wording.subject import subject
+from fourcount.wording.subject import BECAME_CASES, UNNAMED, subject
 
 __all__ = ["DO_NOT_ADD_UP", "WHICH_PEOPLE", "PatientWords", "missing", "patient_words", "picture_heading"]
 
@@ -120,13 +120,15 @@ def picture_heading(record: Record, outcome: Outcome) -> str:
 
 def missing(outcome: Outcome) -> tuple[str, ...]:
     """What has to be named before a patient is shown anything."""
-    wanted = {
-        "the event": outcome.event_words_text.strip() or outcome.event_heading_text.strip(),
-        "the reference group": outcome.reference_label_text.strip(),
-        "the index group": outcome.index_label_text.strip(),
-        "the time span": outcome.span_text.strip(),
+    spoken = subject(outcome)
+    event = spoken.event_words_text.strip() or spoken.event_heading_text.strip()
+    named = {
+        "the event": event not in ("", BECAME_CASES),
+        "the reference group": spoken.reference_label_text.strip() not in ("", *UNNAMED),
+        "the index group": spoken.index_label_text.strip() not in ("", *UNNAMED),
+        "the time span": spoken.span_text.strip() != "",
     }
-    return tuple(name for name, text in wanted.items() if not text)
+    return tuple(name for name, is_named in named.items() if not is_named)
 
 
 def _levelled(interval: str, choices: Choices) -> str:
