@@ -4,7 +4,7 @@ from __future__ import annotations
 
 import subprocess
 import sys
-from collections.abc import Callable
+from collections.abc import Callable, Iterator
 from pathlib import Path
 
 import pytest
@@ -31,17 +31,22 @@ Opened = Callable[..., tuple[MainWindow, HandoutWindow]]
 
 
 @pytest.fixture
-def opened(open_window: Callable[..., MainWindow], qtbot: QtBot) -> Opened:
+def opened(open_window: Callable[..., MainWindow], qtbot: QtBot) -> Iterator[Opened]:
     """A window on a record, with its handout open."""
+    made: list[HandoutWindow] = []
 
     def make(record: Record = SEVERAL) -> tuple[MainWindow, HandoutWindow]:
         window = open_window(record)
         handout = open_handout(window)
         assert handout is not None
         qtbot.waitUntil(handout.isVisible)
+        made.append(handout)
         return window, handout
 
-    return make
+    yield make
+    for handout in made:
+        with qtbot.waitSignal(handout.destroyed):
+            handout.close()
 
 
 @pytest.fixture
