@@ -233,16 +233,9 @@ class ChoiceField(QComboBox):
     chosen = Signal(object)
 
     def __init__(
-        self,
-        look: Look,
-        name: str,
-        choices: Sequence[tuple[object, str]],
-        prefix: str = "",
-        plain: bool = False,
-        whole: bool = False,
-        snug: bool = False,
-        notes: Mapping[str, str] | None = None,
-    ) -> None:
+        self, look: Look, name: str, choices: Sequence[tuple[object, str]], prefix: str = "", plain: bool = False,
+        whole: bool = False, snug: bool = False, notes: Mapping[str, str] | None = None,
+    ) -> None:  # fmt: skip
         super().__init__()
         self._look = look
         self._prefix = prefix
@@ -317,9 +310,7 @@ class ChoiceField(QComboBox):
         quiet = self._plain and not (self.underMouse() or self.hasFocus())
         painter.setFont(self.font())
         painter.setPen(QPen(self._look.colour("muted" if quiet else "ink")))
-        words = self.fontMetrics().elidedText(
-            self._prefix + self.currentText(), Qt.TextElideMode.ElideRight, text_area.width()
-        )
+        words = self._shown_words(text_area.width())
         painter.drawText(text_area, Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter, words)
         painter.drawText(self.rect(), Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter, "▾")
         if self._notes:
@@ -328,6 +319,16 @@ class ChoiceField(QComboBox):
         if not self._plain or self.hasFocus():
             draw_underline(self, painter, self._look)
         painter.end()
+
+    def _shown_words(self, width: int) -> str:
+        """The choice; where it is too long, what stands before its last comma, and what is left out in the tip."""
+        whole = self._prefix + self.currentText()
+        fits = self.fontMetrics().horizontalAdvance(whole) <= width
+        told = "" if fits else tip(whole)
+        if not self._notes and told != self.toolTip():
+            self.setToolTip(told)
+        text = whole if fits else whole.rpartition(", ")[0] or whole
+        return self.fontMetrics().elidedText(text, Qt.TextElideMode.ElideRight, width)
 
     def _draw_note(self, painter: QPainter, area: QRect) -> None:
         """What the choice stands for, beside it, where there is room for all of it."""

@@ -114,6 +114,8 @@ def _table(
 ) -> dict[str, Any]:
     """The rows of the small table, of how many people they speak, and all of it in sentences."""
     rows = patient_table(outcome, findings, choices, people)
+    if isinstance(patient.with_.estimate, Gap) and len(rows) == 1:
+        return {}  # its reason stands above
     heads = patient_table_head(outcome, findings, choices, people)
     said = (
         TABLE_ROW.format(

@@ -16,7 +16,7 @@ START_NOTES = {
     "one": "one, as 12% or 24 of 200",
     "three": "low, usual and high beside each other",
     "rate": "as 12 per 1,000 person-years",
-    "overall": "of people with and without together",
+    "overall": "of exposed and unexposed together",
 }
 START_KIND = "How the starting risk is given"
 
@@ -26,7 +26,7 @@ START_FIELDS = {
     "high_risk_text": "High starting risk",
     "rate_text": "Rate without",
     "overall_risk_text": "Risk of everybody",
-    "exposed_share_text": "Share of people with",
+    "exposed_share_text": "Share of people exposed",
 }
 """Names for a screen reader."""
 
@@ -35,7 +35,7 @@ START_HEADS = {
     "starting_risk_text": "usual",
     "high_risk_text": "high",
     "overall_risk_text": "of everybody",
-    "exposed_share_text": "share with",
+    "exposed_share_text": "share exposed",
 }
 """Over the fields, where there is more than one."""
 
@@ -62,7 +62,7 @@ QUIET = {
 """The links that open fields which few patients need."""
 
 QUIET_NAMES = {
-    "span": "Carried over",
+    "span": "Time span",
     "words": "Plain words",
     "certainty": "Certainty",
     "handout": "Handout",

@@ -55,7 +55,7 @@ class Figures(QWidget):
 
     def show_view(self, view: PatientView) -> None:
         """Show the picture and all that goes with it."""
-        there = bool(view.rows)
+        there = view.picture is not None
         self.drawn = view.picture
         self.picture.show_picture(view.picture, view.sentence)
         relative = view.relative.words.sentence if view.relative else ""
@@ -63,11 +63,9 @@ class Figures(QWidget):
         self.summary.show_words(view.summary)
         self.detail.show_words(view.detail)
         self.table.show_rows(view.rows, view.rows_corner, view.rows_sentence)
-        for widget in (self.draw, self.copy):
-            widget.setVisible(view.picture is not None)
+        for link in (self.draw, self.copy, self.show_patient, self.handout):
+            link.setVisible(there)
         self.curve.setVisible(view.to_curve)
-        for page in (self.show_patient, self.handout):
-            page.setVisible(there)
         self._place_table(len(view.rows) > 1)
 
     def _build(self) -> None:

@@ -10,7 +10,7 @@ from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QSizePolicy, QWidget
 
 from fourcount.face.look import Look
-from fourcount.ink.typeset import LEFT, RIGHT, draw_text, text_height, text_width
+from fourcount.ink.typeset import draw_text, text_height, text_width
 from fourcount.wording.patient_labels import TABLE_HEADS, TABLE_NAME
 
 if TYPE_CHECKING:
@@ -19,9 +19,6 @@ if TYPE_CHECKING:
 GAP = 10
 PAD = 5
 """Pixels at 100% text between two columns, and above and under a row."""
-
-WIDEST_LABEL = 0.3
-"""The share of the width that the rows' names take at most."""
 
 
 class Line(NamedTuple):
@@ -74,49 +71,47 @@ class PatientTable(QWidget):
     def paintEvent(self, event: QPaintEvent) -> None:
         look, pad = self._look, self._look.px(PAD)
         painter = QPainter(self)
+        named = len(self._rows) > 1
         for place, line in enumerate(self._lay(self.width())):
-            font = look.font("body" if place else "small")
-            for column, (x, wide, text) in enumerate(line.cells):
-                figure = bool(column) or self._alone
-                colour = look.palette.ink if place and figure else look.palette.muted
-                draw_text(
-                    painter, x, line.top, wide, text, font, colour, RIGHT if figure and len(line.cells) > 2 else LEFT
-                )
+            for x, wide, text in line.cells:
+                name = named and x == 0
+                colour = look.palette.ink if place and not name else look.palette.muted
+                draw_text(painter, x, line.top, wide, text, look.font("small"), colour)
             if place:
                 painter.fillRect(0, round(line.top) - pad, self.width(), 1, look.colour("hairline"))
         painter.end()
 
-    @property
-    def _alone(self) -> bool:
-        """Whether there is one starting risk, which stands in its field above: no row needs a name then."""
-        return len(self._rows) == 1
-
     def _lay(self, width: int) -> list[Line]:
         """The heads and the rows with their cells at a width."""
-        if not self._rows:
-            return []
         look, lines, y = self._look, [], 0.0
-        edges = self._edges(width)
-        for place, texts in enumerate(((self._corner, *TABLE_HEADS.values()), *map(_texts, self._rows))):
-            laid = [(x, wide, text) for (x, wide), text in zip(edges, texts[self._alone :], strict=True)]
-            if place and not any(texts[2:]):  # a reason instead of figures
-                x = edges[0 if self._alone else 1][0]
-                laid = [*(laid[:1] if not self._alone else []), (x, width - x, texts[1])]
-            font = look.font("body" if place else "small")
-            height = max(text_height(text, font, wide) for _, wide, text in laid)
+        edges = self._edges(width) if self._rows else []
+        for texts in self._texts:
+            laid = [(x, wide, text) for (x, wide), text in zip(edges, texts, strict=True) if text]
+            if len(laid) > 1 and not texts[-1]:  # a reason instead of figures
+                x, _, reason = laid.pop()
+                laid.append((x, width - x, reason))
+            height = max(text_height(text, look.font("small"), wide) for _, wide, text in laid)
             lines.append(Line(y, y + height, laid))
             y += height + 2 * look.px(PAD)
         return lines
 
+    @property
+    def _texts(self) -> list[tuple[str, ...]]:
+        """Every cell from top to bottom; of one starting risk, which stands in its field above, no row's name."""
+        if not self._rows:
+            return []
+        every = [(self._corner, *TABLE_HEADS.values()), *map(_texts, self._rows)]
+        return [texts[1:] for texts in every] if len(self._rows) == 1 else every
+
     def _edges(self, width: int) -> list[tuple[float, float]]:
-        """Left edge and width of each column: the names as wide as they need, the figures in equal shares."""
-        gap, font = self._look.px(GAP), self._look.font("body")
-        if self._alone:
-            share = (width - gap * (len(TABLE_HEADS) - 1)) / len(TABLE_HEADS)
-            return [(place * (share + gap), share) for place in range(len(TABLE_HEADS))]
-        name = min(max(text_width(row.label, font) for row in self._rows) + 1, width * WIDEST_LABEL)
-        share = (width - name) / len(TABLE_HEADS) - gap
-        return [(0.0, name), *((name + gap + place * (share + gap), share) for place in range(len(TABLE_HEADS)))]
+        """Left edge and width of each column: as wide as its widest text, and the rest shared out between them."""
+        font, gap = self._look.font("small"), float(self._look.px(GAP))
+        columns = zip(*(texts for texts in self._texts if texts[-1]), strict=True)
+        needed = [max(text_width(line, font) for text in column for line in text.split("\n")) + 1 for column in columns]
+        free = width - sum(needed) - gap * (len(needed) - 1)
+        wide = [each + free / len(needed) if free < 0 else each for each in needed]
+        gap += max(free, 0) / (len(needed) - 1)
+        return [(sum(wide[:place]) + gap * place, each) for place, each in enumerate(wide)]
 
     def _on_look_changed(self) -> None:
         self.updateGeometry()
