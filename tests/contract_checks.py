@@ -5,6 +5,8 @@ from __future__ import annotations
 import math
 from typing import Any
 
+from contract_keys import PATIENT_KEYS, PATIENT_KEYS_OF_THREE
+
 
 def withheld(part: Any) -> bool:
     """Whether a part is given up with a reason; then the reason has to be whole."""
@@ -60,3 +62,32 @@ def check_number_needed(part: Any) -> None:
         check_number(limit["value"], 1 - 1e-12)
         assert limit["kind"] in {"NNTB", "NNTH", "neither"}
     assert isinstance(part["through_infinity"], bool)
+
+
+def check_pair(part: Any, low: float, high: float) -> None:
+    """Two ordered limits in their range, or a reason."""
+    if not withheld(part):
+        check_number(part[0], low, high)
+        check_number(part[1], low, high)
+        check_ordered(*part)
+
+
+def check_patient(part: Any) -> None:
+    """The effect at one starting risk, and of three the low and the high one alike."""
+    if withheld(part):
+        return
+    assert tuple(key for key in part if key not in PATIENT_KEYS_OF_THREE) == PATIENT_KEYS
+    for key in ("baseline", "risk_without"):
+        check_number(part[key], 0, 1)
+    for key in ("start_interval", "risk_without_interval"):
+        check_pair(part[key], 0, 1)
+    check_figure(part["risk_with"], 0, 1)
+    check_figure(part["difference"], -1, 1)
+    check_number_needed(part["number_needed"])
+    check_figure(part["risk_ratio"], 0)
+    check_figure(part["carried"])
+    assert part["effect"] in ("risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference")
+    assert part["range_from"] in ("table", "effect", "both")
+    assert part["start_from"] in ("reference", "typed", "rate", "overall")
+    for side in ("low", "high"):
+        check_patient(part.get(side, {"withheld": "-", "text": "-"}))

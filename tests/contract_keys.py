@@ -40,3 +40,27 @@ TIMED_METHOD_KEYS = {"timed_difference": {"square-and-add"}, "timed_ratio": {"sq
 STRATA_TEST_KEYS = ("cmh", "cmh-corrected")
 HOMOGENEITY_TEST_KEYS = ("breslow-day", "breslow-day-tarone")
 RECOVERY_KEYS = ("recovery-limits", "recovery-p", "interaction")
+
+PATIENT_KEYS = (
+    "baseline",
+    "effect",
+    "risk_without",
+    "risk_with",
+    "difference",
+    "number_needed",
+    "risk_ratio",
+    "range_from",
+    "start_from",
+    "start_interval",
+    "risk_without_interval",
+    "measure",
+    "carried",
+    "adjusted",
+    "adjusted_for",
+    "level",
+    "study_span",
+    "other_span",
+)
+PATIENT_KEYS_OF_THREE = ("rank", "low", "high")
+LINE_KEYS = ("kind", "measure", "value", "lies", "worse_side", "level")
+LINE_KEYS_OF_A_MARGIN = ("p", "method")

@@ -6,6 +6,7 @@ from collections.abc import Iterable
 from textwrap import fill
 
 from fourcount.appraisal.findings import Gap, OutcomeFindings
+from fourcount.publish.contract_patient import asked_of_a_patient
 from fourcount.publish.letter_figures import withheld_lines
 from fourcount.publish.plain_text import one_line
 from fourcount.record.outcome import Outcome
@@ -14,6 +15,7 @@ from fourcount.wording import labels, limits, starts
 from fourcount.wording.cautions import SAID_OF_THE_PATIENT, STANDING, caution_text
 from fourcount.wording.extras import extra_lines
 from fourcount.wording.form import lacking, shown_choices
+from fourcount.wording.gaps import why_no_patient
 from fourcount.wording.lines import MeasureLine, measure_lines
 from fourcount.wording.own_line import own_line_sentence
 from fourcount.wording.patient import patient_words
@@ -88,12 +90,16 @@ def _beside(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> st
 
 
 def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> str:
-    """Only where the patient's figures are not the study's own: there the rows above say the same."""
-    patient = findings.patient
+    """Only where the patient's figures are not the study's own: there the rows above say the same.
+
+    Where something was typed for a patient and nobody is carried, it says why.
+    """
+    patient, head = findings.patient, labels.COLUMNS["patient"]
     if isinstance(patient, Gap):
-        return ""
+        why = why_no_patient(patient, findings.form, next(iter(findings.measures), ""))
+        return "\n".join([head, _wrapped(why, INDENT)]) if asked_of_a_patient(outcome) else ""
     words = patient_words(outcome, findings, choices, None)
-    head, ranks = labels.COLUMNS["patient"], tuple(_wrapped(line, INDENT) for line in words.ranks)
+    ranks = tuple(_wrapped(line, INDENT) for line in words.ranks)
     if starts.as_in_the_study(patient):
         return "\n".join([head, *ranks]) if ranks else ""
     lines = (
