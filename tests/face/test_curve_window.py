@@ -1,0 +1,304 @@
+"""The curve's window: it follows the record, is drawn elsewhere, says everything in words, and leaves as a file."""
+
+from __future__ import annotations
+
+import threading
+from collections.abc import Iterator
+from pathlib import Path
+from typing import TYPE_CHECKING
+
+import pytest
+from PySide6.QtCore import Qt
+from PySide6.QtGui import QGuiApplication, QImage
+from PySide6.QtTest import QTest
+from PySide6.QtWidgets import QApplication, QTableWidget, QWidget
+
+from fourcount.face import curve_file, curve_window
+from fourcount.face.curve_window import CurveWindow, open_curve
+from fourcount.face.later import Later
+from fourcount.ink.curve import draw_curve
+from fourcount.wording import curve_labels as labels
+from fourcount.wording.curve import NOTHING
+
+if TYPE_CHECKING:
+    from conftest import Hands
+
+ODDS = "Odds ratio as a risk ratio"
+
+
+def drawn(hands: Hands, shown: CurveWindow) -> QImage:
+    """The drawing of the record as it stands, once it is there."""
+    hands.qtbot.waitUntil(lambda: not shown._pause.isActive() and shown._asked == shown._now and shown.copy.isEnabled())
+    hands.qtbot.waitUntil(lambda: not shown._worker._busy)
+    QApplication.processEvents()
+    return shown.canvas.image
+
+
+@pytest.fixture
+def shown(example: Hands) -> Iterator[CurveWindow]:
+    """The curve of the worked example's counts."""
+    example.do("curve")
+    opened = example.window.findChild(CurveWindow)
+    assert opened is not None
+    drawn(example, opened)
+    yield opened
+    for left in example.window.findChildren(CurveWindow):
+        left.close()
+
+
+def choose(hands: Hands, shown: CurveWindow, text: str) -> None:
+    hands.choose(shown.view, text)
+    drawn(hands, shown)
+
+
+def test_the_command_opens_it_once(example: Hands, shown: CurveWindow) -> None:
+    """Asked for again, the same window comes to the front."""
+    assert open_curve(example.window) is shown
+    assert len(example.window.findChildren(CurveWindow)) == 1
+
+
+def test_the_window_is_live_before_the_first_drawing(example: Hands, monkeypatch: pytest.MonkeyPatch) -> None:
+    """Until the drawing is there it says so, nothing can be saved yet, and typing goes on meanwhile."""
+    go, threads = threading.Event(), []
+
+    def slow(*request: object) -> bytes:
+        threads.append(threading.current_thread())
+        go.wait(10)
+        return draw_curve(*request)  # type: ignore[arg-type]
+
+    monkeypatch.setattr(curve_window, "draw_curve", slow)
+    opened = open_curve(example.window)
+    example.qtbot.waitUntil(lambda: bool(threads))
+    assert threads[0] is not threading.main_thread()
+    assert opened.canvas.image.isNull()
+    assert not opened.save.isEnabled()
+    assert "17.1%" in opened.sentence.text()
+    before = opened.canvas.grab().toImage()
+    example.window.activateWindow()
+    example.qtbot.waitUntil(example.window.isActiveWindow)
+    example.write(example.window.printed.grid.cells["first_left_text"], "50")
+    assert "50" in example.texts
+    go.set()
+    drawn(example, opened)
+    assert opened.save.isEnabled()
+    assert opened.canvas.grab().toImage() != before
+    opened.close()
+
+
+def test_it_follows_the_record(example: Hands, shown: CurveWindow) -> None:
+    """A starting risk typed in the main window moves the sentence and the drawing."""
+    before = drawn(example, shown)
+    example.window.session.edit_text("starting_risk_text", "12%")
+    example.qtbot.waitUntil(lambda: "At a starting risk of 12%: 6.5%" in shown.sentence.text())
+    assert drawn(example, shown) != before
+
+
+def test_it_follows_undo(example: Hands, shown: CurveWindow) -> None:
+    """What is undone in the main window is undone here."""
+    example.window.session.edit_text("starting_risk_text", "12%")
+    example.qtbot.waitUntil(lambda: "12%" in shown.sentence.text())
+    example.window.session.undo()
+    example.qtbot.waitUntil(lambda: "12%" not in shown.sentence.text())
+
+
+def test_every_view_can_be_chosen_by_keyboard(example: Hands, shown: CurveWindow) -> None:
+    """Each effect's band, and the odds ratio as a risk ratio, by arrows in the choice."""
+    images = [drawn(example, shown)]
+    for place in range(1, shown.view.count()):
+        choose(example, shown, shown.view.itemText(place))
+        images.append(shown.canvas.image)
+    assert shown.view.currentText() == ODDS
+    assert "the odds ratio is a risk ratio of" in shown.sentence.text()
+    assert all(image != other for i, image in enumerate(images) for other in images[:i])
+
+
+def test_a_chosen_view_stays_while_the_numbers_change(example: Hands, shown: CurveWindow) -> None:
+    """Typing does not put the choice back."""
+    choose(example, shown, ODDS)
+    example.window.session.edit_text("first_left_text", "40")
+    drawn(example, shown)
+    assert shown.view.currentText() == ODDS
+
+
+def test_a_view_that_is_gone_gives_way(example: Hands, shown: CurveWindow) -> None:
+    """Where its effect cannot be carried any more, the usual one is drawn."""
+    choose(example, shown, ODDS)
+    example.window.session.edit_text("second_left_text", "0")
+    drawn(example, shown)
+    assert shown.view.currentText() == "Risk with: risk difference and its interval"
+
+
+def test_without_an_effect_it_says_so(example: Hands, shown: CurveWindow) -> None:
+    """Cells that give nothing leave a sentence, and nothing to save."""
+    example.window.session.edit_text("first_left_text", "x")
+    example.qtbot.waitUntil(lambda: shown.notes.text() == NOTHING)
+    assert not shown.save.isEnabled()
+    assert shown.table.rowCount() == 0
+
+
+def test_the_whole_range_can_be_seen(example: Hands, shown: CurveWindow) -> None:
+    """One command shows all starting risks, and is then the way back."""
+    before = drawn(example, shown)
+    example.click(shown.whole)
+    assert drawn(example, shown) != before
+    assert shown.whole.text() == labels.NEAR
+    example.click(shown.whole)
+    assert drawn(example, shown) == before
+
+
+def test_the_same_numbers_are_a_table(example: Hands, shown: CurveWindow) -> None:
+    """Shown on demand, walked through by keyboard, never changed."""
+    assert shown.table.isHidden()
+    example.click(shown.numbers)
+    assert shown.table.isVisible()
+    heads = [shown.table.horizontalHeaderItem(column).text() for column in range(4)]
+    assert heads[0] == "Starting risk"
+    assert heads[1].startswith("Risk ratio 0.54")
+    cells = {shown.table.item(row, 0).text(): shown.table.item(row, 1).text() for row in range(shown.table.rowCount())}
+    assert cells["17.1% (the study and this patient)"] == "9.2% (6.4 to 13.3%)"
+    assert shown.table.editTriggers() == QTableWidget.EditTrigger.NoEditTriggers
+    example.click(shown.numbers)
+    assert shown.table.isHidden()
+
+
+def test_a_screen_reader_hears_all_of_it(shown: CurveWindow) -> None:
+    """The drawing is one object with a name and a description; every control has a name."""
+    assert shown.canvas.accessibleName() == "Across starting risks: had the event"
+    assert "whichever effect is kept constant" in shown.canvas.accessibleDescription()
+    assert "assumption" in shown.canvas.accessibleDescription()
+    for widget in (shown.view, shown.whole, shown.numbers, shown.save, shown.copy, shown.table):
+        assert widget.accessibleName()
+
+
+def test_tab_walks_every_control(example: Hands, shown: CurveWindow) -> None:
+    """Tab goes from the choice to the buttons and round again."""
+    shown.view.setFocus(Qt.FocusReason.TabFocusReason)
+    walked: list[QWidget] = []
+    while example.focus not in walked:
+        walked.append(example.focus)
+        QTest.keyClick(example.focus, Qt.Key.Key_Tab)
+    stops = [shown.view, shown.whole, shown.numbers, shown.canvas, shown.save, shown.copy]
+    assert [widget for widget in walked if widget in stops] == stops
+
+
+@pytest.mark.parametrize(("name", "begins"), [("a.png", b"\x89PNG"), ("a.svg", b"<?xml"), ("a.pdf", b"%PDF")])
+def test_it_is_saved_with_its_cautions(
+    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch, tmp_path: Path, name: str, begins: bytes
+) -> None:
+    """The suffix decides the kind; the file is named in a sentence."""
+    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / name))
+    example.click(shown.save)
+    assert shown.notice.text() == labels.SAVED.format(name=name)
+    data = (tmp_path / name).read_bytes()
+    assert data.startswith(begins)
+    if name == "a.svg":
+        assert b"Does not recommend" in data
+
+
+def test_a_folder_that_cannot_be_written_is_a_sentence(
+    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch, tmp_path: Path
+) -> None:
+    """Nothing is written, nothing lost, and the next try works."""
+    (tmp_path / "a file").write_text("mine", encoding="utf-8")
+    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / "a file" / "curve.png"))
+    example.click(shown.save)
+    assert shown.notice.text().startswith("The curve could not be saved in ")
+    assert (tmp_path / "a file").read_text(encoding="utf-8") == "mine"
+    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / "curve.png"))
+    example.click(shown.save)
+    assert (tmp_path / "curve.png").exists()
+
+
+def test_another_kind_of_file_is_a_sentence(
+    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch, tmp_path: Path
+) -> None:
+    """A name that ends in none of the three kinds writes nothing."""
+    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / "curve.xls"))
+    example.click(shown.save)
+    assert "curve.xls ends in none of these" in shown.notice.text()
+    assert list(tmp_path.glob("curve*")) == []
+
+
+def test_a_save_that_is_called_off_says_nothing(
+    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch
+) -> None:
+    """Nothing chosen, nothing done."""
+    monkeypatch.setattr(curve_file, "ask_path", lambda parent: "")
+    example.click(shown.save)
+    assert shown.notice.text() == ""
+
+
+def test_it_is_copied_as_a_picture(example: Hands, shown: CurveWindow) -> None:
+    """On white, whatever the window looks like, with twice the pixels."""
+    example.window.look.set_appearance("dark")
+    drawn(example, shown)
+    example.click(shown.copy)
+    image = QGuiApplication.clipboard().image()
+    assert image.width() == 2 * curve_file.WIDTH
+    assert image.pixelColor(2, 2).name() == "#ffffff"
+    assert shown.notice.text() == labels.COPIED
+
+
+def test_what_is_told_ends_with_the_next_change(example: Hands, shown: CurveWindow) -> None:
+    """A notice about a copy says nothing of a changed record."""
+    example.click(shown.copy)
+    example.window.session.edit_text("first_left_text", "40")
+    assert shown.notice.text() == ""
+
+
+def test_it_is_drawn_anew_in_the_dark_and_at_larger_text(example: Hands, shown: CurveWindow) -> None:
+    """Palette and text size are those of the window."""
+    light = drawn(example, shown)
+    example.window.look.set_appearance("dark")
+    dark = drawn(example, shown)
+    assert dark.pixelColor(2, 2).lightness() < 60 < light.pixelColor(2, 2).lightness()
+    example.window.look.set_zoom(2.0)
+    assert drawn(example, shown) != dark
+
+
+def test_escape_leaves_and_nothing_follows(example: Hands, shown: CurveWindow) -> None:
+    """The closed window draws no more, and the main one goes on."""
+    QTest.keyClick(shown, Qt.Key.Key_Escape)
+    example.qtbot.waitUntil(lambda: not example.window.findChildren(CurveWindow))
+    example.window.session.edit_text("first_left_text", "40")
+    assert example.window.findChildren(CurveWindow) == []
+
+
+def test_an_error_in_drawing_is_told_to_the_window(example: Hands, monkeypatch: pytest.MonkeyPatch) -> None:
+    """It surfaces in the window's thread, where the program listens for the unexpected; later drawings go on."""
+
+    def broken(*request: object) -> bytes:
+        raise ValueError("no ink")
+
+    monkeypatch.setattr(curve_window, "draw_curve", broken)
+    with example.qtbot.captureExceptions() as errors:
+        opened = open_curve(example.window)
+        example.qtbot.waitUntil(lambda: bool(errors))
+    assert str(errors[0][1]) == "no ink"
+    monkeypatch.setattr(curve_window, "draw_curve", draw_curve)
+    example.click(opened.whole)
+    assert not drawn(example, opened).isNull()
+    opened.close()
+
+
+def test_a_worker_that_is_closed_answers_nothing(example: Hands) -> None:
+    """What is asked of it afterwards is never begun."""
+    from fourcount.face.curve_worker import CurveWorker
+
+    later = Later()
+    worker, begun = CurveWorker(later), []
+    worker.close()
+    worker.ask("key", lambda: begun.append("drawn") or b"")
+    assert later.finish(5.0)
+    assert begun == []
+
+
+def test_a_name_without_a_suffix_gets_that_of_its_kind(shown: CurveWindow, monkeypatch: pytest.MonkeyPatch) -> None:
+    """The kind that was chosen in the question decides, a typed suffix goes first."""
+    ask = "fourcount.face.curve_file.QFileDialog.getSaveFileName"
+    monkeypatch.setattr(ask, lambda *rest: ("/x/curve", labels.FILTERS[".pdf"]))
+    assert curve_file.ask_path(shown) == "/x/curve.pdf"
+    monkeypatch.setattr(ask, lambda *rest: ("/x/curve.svg", labels.FILTERS[".pdf"]))
+    assert curve_file.ask_path(shown) == "/x/curve.svg"
+    monkeypatch.setattr(ask, lambda *rest: ("", ""))
+    assert curve_file.ask_path(shown) == ""
