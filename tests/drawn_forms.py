@@ -97,3 +97,51 @@ def outcomes(draw):
             ),
         )
     )
+
+
+whole_tables = st.sampled_from(
+    (
+        of_total,
+        lambda **f: of_total((0, 50, 7, 50), **f),
+        lambda **f: of_total((50, 50, 1, 999), **f),
+        lambda **f: of_total((30, 100, 30, 100), **f),
+        paired,
+        lambda **f: paired("matched", **f),
+        lambda **f: paired("before-after", ("", 20, 40, ""), **f),
+        person_time,
+        at_time,
+        strata,
+        lambda **f: strata("case-control", **f),
+        lambda **f: of_total(**{**f, "design": "case-control"}),
+        lambda **f: of_total(**{**f, "design": "survey"}),
+        lambda **f: effect_only("hazard_ratio", **f),
+        lambda **f: effect_only("odds_ratio", "2.4; 90% CI 0.9, 4.8", **f),
+        lambda **f: effect_only("risk_ratio", "1.9 (1.2 to 3.1)", **f),
+        lambda **f: effect_only("risk_difference", "-7.9% (-12.6 to -3.3)", **f),
+    )
+)
+
+
+@st.composite
+def carried_outcomes(draw):
+    """Tables that hold together, and starting risks that can be read: what is typed of a patient comes to something."""
+    readable = st.sampled_from(("", "12%", "0%", "100%", "24 of 200", "12% (9 to 15)", "0 of 30", "0.001%", "70%"))
+    patient = Patient(
+        start_kind=draw(st.sampled_from(START_KINDS)),
+        starting_risk_text=draw(readable),
+        low_risk_text=draw(st.sampled_from(("", "0.01%", "0%"))),
+        high_risk_text=draw(st.sampled_from(("", "80%", "100%"))),
+        rate_text=draw(st.sampled_from(("12 per 1,000 person-years", "0.4/month", "0 per year"))),
+        overall_risk_text=draw(st.sampled_from(("12%", "0%", "60%"))),
+        exposed_share_text=draw(st.sampled_from(("30%", "0%", "100%"))),
+        other_span_text=draw(st.sampled_from(("", "", "5 years", "1 day"))),
+        effect=draw(st.sampled_from(EFFECTS)),
+    )
+    fields = {
+        "patient": patient,
+        "left_welcome": draw(st.booleans()),
+        "index_group": draw(st.sampled_from(("first", "second"))),
+        "counted": draw(st.sampled_from(("left", "right"))),
+        "adjusted_text": draw(st.sampled_from(("", "OR 0.61 (90% CI 0.42 to 0.88)", "HR 2.0 (1.1 to 3.6)"))),
+    }
+    return draw(whole_tables)(**fields)

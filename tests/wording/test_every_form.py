@@ -8,7 +8,7 @@ import pytest
 from hypothesis import given, settings
 from hypothesis import strategies as st
 
-from drawn_forms import count, outcomes
+from drawn_forms import carried_outcomes, count, outcomes
 from forms import effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
 from fourcount.record.paper import FAMILIES, Choices
@@ -25,6 +25,7 @@ from fourcount.wording.sentence import headline, measure_sentence, p_sentence
 from fourcount.wording.working import PATIENT, working
 
 BANNED = re.compile(r"\b(significan\w*|likely|chance|chances|nan|None|inf|should|recommend\w*)\b")
+HOLES = re.compile(r"  | [.,;:]|\(\)|[,;] [,;]|\.\.|…|\([,;]|: ,")
 PRINTED_SOURCE = ("Formula", "Source", "Note")  # the methods' own words
 NOT_OF_ODDS = re.compile(r"\b(risks?|probability|probable|prevalences?)\b")
 
@@ -70,6 +71,16 @@ def test_every_text_exists_whatever_is_typed(outcome, family, level):
         assert "  " not in text, text
         assert " ." not in text, text
         assert "…" not in text, text
+
+
+@settings(max_examples=250)
+@given(carried_outcomes(), st.sampled_from((0.8, 0.95)))
+def test_every_text_of_a_patient_exists_wherever_one_is_carried(outcome, level):
+    """Every effect, start and span, with its working; no hole where something was left out."""
+    for text in all_texts(outcome, Choices(level=level), with_working=True):
+        assert isinstance(text, str)
+        assert BANNED.search(text) is None, text
+        assert HOLES.search(text) is None, text
 
 
 @settings(max_examples=120)
