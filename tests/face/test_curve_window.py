@@ -11,7 +11,7 @@ import pytest
 from PySide6.QtCore import Qt
 from PySide6.QtGui import QGuiApplication, QImage
 from PySide6.QtTest import QTest
-from PySide6.QtWidgets import QApplication, QTableWidget, QWidget
+from PySide6.QtWidgets import QTableWidget, QWidget
 
 from fourcount.face import curve_file, curve_window
 from fourcount.face.curve_window import CurveWindow, open_curve
@@ -28,9 +28,7 @@ ODDS = "Odds ratio as a risk ratio"
 
 def drawn(hands: Hands, shown: CurveWindow) -> QImage:
     """The drawing of the record as it stands, once it is there."""
-    hands.qtbot.waitUntil(lambda: not shown._pause.isActive() and shown._asked == shown._now and shown.copy.isEnabled())
-    hands.qtbot.waitUntil(lambda: not shown._worker._busy)
-    QApplication.processEvents()
+    hands.qtbot.waitUntil(lambda: shown.drawn and not shown._pause.isActive() and shown.copy.isEnabled())
     return shown.canvas.image
 
 

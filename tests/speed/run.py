@@ -191,6 +191,29 @@ def picture(children: Children) -> Iterator[Row]:
     yield Row(what="the same with one call an icon", measured=f"{single:.0f} ms", bar="")
 
 
+def curve(children: Children) -> Iterator[Row]:
+    values = [children.run("curve.py", FOLDER) for _ in range(children.runs)]
+    first, held, later = (statistics.median(value[key] for value in values) for key in ("first", "held", "later"))
+    yield Row(
+        what="the first curve on screen, its library loaded in a thread",
+        measured=f"{1000 * first:.0f} ms",
+        bar="within 2 s",
+        met=first <= 2,
+    )
+    yield Row(
+        what="the window is held up meanwhile at most",
+        measured=f"{1000 * held:.0f} ms",
+        bar="within 100 ms",
+        met=held <= 0.1,
+    )
+    yield Row(
+        what="a later curve on screen, after the pause in typing",
+        measured=f"{1000 * later:.0f} ms",
+        bar="within 150 ms",
+        met=later <= 0.15,
+    )
+
+
 MEASUREMENTS: dict[str, Callable[[Children], Iterator[Row]]] = {
     "paint": first_paint,
     "findings": findings_on_screen,
@@ -200,6 +223,7 @@ MEASUREMENTS: dict[str, Callable[[Children], Iterator[Row]]] = {
     "everything": everything,
     "check": check,
     "picture": picture,
+    "curve": curve,
 }
 
 

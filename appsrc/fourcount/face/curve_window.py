@@ -60,7 +60,7 @@ def open_curve(window: MainWindow) -> CurveWindow:
 
 
 class CurveWindow(QDialog):
-    """Follows the record; nothing in it changes the record."""
+    """Follows the record; nothing in it changes the record. ``drawn`` says whether the drawing is that of its words."""
 
     def __init__(self, window: MainWindow) -> None:
         super().__init__(window)
@@ -72,6 +72,7 @@ class CurveWindow(QDialog):
         self._views: dict[str, View] = {}
         self._now: Request | None = None
         self._asked: Request | None = None
+        self.drawn = False
         self.setWindowTitle(labels.WINDOW_TITLE)
         self.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose)
         self.canvas = CurveCanvas(self._look)
@@ -176,6 +177,7 @@ class CurveWindow(QDialog):
         self._now = Request(found, view, words, self._look.palette, sheet)
         if self._now != self._asked and self.isVisible():
             self._asked = self._now
+            self.drawn = False
             self._worker.ask(self._now, partial(draw_curve, *self._now))
 
     def _show_enabled(self) -> None:
@@ -205,6 +207,7 @@ class CurveWindow(QDialog):
             image = QImage.fromData(data)
             image.setDevicePixelRatio(key.sheet.ratio)
             self.canvas.show_image(image)
+            self.drawn = True
             self._show_enabled()
 
     def _on_view(self, key: object) -> None:
