@@ -41,7 +41,7 @@ def carried(
         return risk if isinstance(risk, Gap) else risk - start
 
     def over(risk: float | Gap) -> float | Gap:
-        return risk if isinstance(risk, Gap) else risk / start
+        return risk if isinstance(risk, Gap) else risk / (start or 1.0)
 
     limits = figure.interval
     low, high = (limits.low, limits.high) if isinstance(limits, Interval) else (Gap("x"), Gap("x"))

@@ -346,6 +346,17 @@ def test_a_difference_below_nobody_is_withheld():
     assert "would fall below 0%, so the interval is open there; carrying the odds ratio avoids it." in words.detail
 
 
+@pytest.mark.parametrize("kind", ["risk_ratio", "odds_ratio", "hazard_ratio"])
+def test_of_nobody_there_is_no_interval_and_no_relative_figure(kind):
+    """At a starting risk of 0% every ratio gives nobody: nothing is as wide as nothing, or 46% lower."""
+    outcome = of_total(patient=typed("0%"))
+    words = words_of(outcome, carried(kind, RR, 0.0, risk_ratio=RR))
+    assert words.detail == "NNT at this starting risk ∞."
+    assert (words.summary, words.with_interval) == ("over 12 months", "")
+    (row,) = patient_table(outcome, findings_with(outcome, carried(kind, RR, 0.0, risk_ratio=RR)), Choices())
+    assert row == ("0%", "0", "0", "the same number", "NNT ∞")
+
+
 def test_no_effect_is_the_same_number():
     """A ratio of 1 keeps its range on both sides, and has no relative words."""
     outcome = of_total(patient=typed())

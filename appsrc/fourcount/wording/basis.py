@@ -5,7 +5,7 @@ from __future__ import annotations
 from fourcount.appraisal.findings import Gap, Interval, PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import USUAL_LEVEL, Choices
-from fourcount.wording import effects, names, spans, starts
+from fourcount.wording import carried, effects, names, spans, starts
 
 AT_OWN_RISK = "At {own}"
 OWN_RANGE = "The interval is the study’s own."
@@ -30,7 +30,7 @@ def basis(outcome: Outcome, patient: PatientFindings, choices: Choices = USUAL) 
 
 def range_note(outcome: Outcome, patient: PatientFindings) -> str:
     """What the interval of the difference holds and what it leaves out; "" where there is no interval."""
-    if isinstance(patient.difference.interval, Gap):
+    if isinstance(patient.difference.interval, Gap) or carried.no_width(patient.difference):
         return ""
     if patient.range_from == "table":
         return OWN_RANGE

@@ -17,6 +17,7 @@ from fourcount.wording.half_added import half_added
 from fourcount.wording.headline import choose
 
 NOT_GIVEN = "not given"
+NO_WIDTH_NEEDED = f"{numbers.INFINITY}{numbers.TO}{numbers.INFINITY}"
 NO_CHANGE = "the same number"
 PASSES_ALL = "The risk would pass 100% here."
 CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
@@ -87,15 +88,23 @@ def interval(patient: PatientFindings, choices: Choices, people: int) -> str:
 
 def change_limits(difference: Figure, people: int) -> str:
     """``3 to 8`` people fewer or more, or "" where there is no interval."""
+    if no_width(difference):
+        return ""
     return limits.sided(difference.interval, difference.estimate, lambda x: of_people.apart(x, people))
 
 
 def risk_limits(figure: Figure, people: int) -> str:
     """``4 to 9`` people with the event, or "" where there is no estimate or no interval."""
     interval = figure.interval
-    if isinstance(interval, Gap) or isinstance(figure.estimate, Gap):
+    if isinstance(interval, Gap) or isinstance(figure.estimate, Gap) or no_width(figure):
         return ""
     return numbers.TO.join(_end(limit, people) for limit in (interval.low, interval.high))
+
+
+def no_width(figure: Figure) -> bool:
+    """Whether both limits are one and the same, as at a starting risk of nobody: no interval worth the name."""
+    interval = figure.interval
+    return not isinstance(interval, Gap) and interval.low == interval.high
 
 
 def _end(limit: float | Gap, people: int) -> str:
@@ -117,7 +126,14 @@ def needed_value(needed: AnyNumberNeeded) -> str:
 
 
 def _needed(needed: AnyNumberNeeded) -> str:
-    return f"{numbers.number_needed(needed.estimate)} ({limits.number_needed_interval(needed)})"
+    value, interval = numbers.number_needed(needed.estimate), limits.number_needed_interval(needed)
+    return value if interval == NO_WIDTH_NEEDED else f"{value} ({interval})"
+
+
+def relative_words(patient: PatientFindings) -> str:
+    """The relative figure; none where nobody has the event either way, of whom no share can be more or fewer."""
+    nobody = patient.without.estimate == 0.0 and patient.with_.estimate == 0.0
+    return "" if nobody else relative(patient.risk_ratio)
 
 
 def relative(ratio: Figure) -> str:
