@@ -38,7 +38,8 @@ def run(arguments: Sequence[str]) -> int:
         return _complain(record, MISTYPED)
     if PurePath(wanted.out).suffix.lower() not in handout_labels.FILTERS:
         return _complain(handout_labels.UNKNOWN_SUFFIX.format(name=specimen(wanted.out)), MISTYPED)
-    os.environ["QT_QPA_PLATFORM"] = "offscreen"  # no display is asked for, even where there is one
+    if sys.platform.startswith("linux") and "PySide6.QtWidgets" not in sys.modules:
+        os.environ["QT_QPA_PLATFORM"] = "offscreen"  # elsewhere there is a display, and offscreen there are no fonts
     from fourcount.face.application import make_application
     from fourcount.face.handout_pages import candidates, page_of
     from fourcount.face.page_file import write_page

@@ -37,6 +37,7 @@ PAUSE = 250
 """Milliseconds after the last change of the record before the page is made anew."""
 
 PANEL = 300
+ROOM_FOR_A_FRAME = QSize(0, 40)
 
 
 def open_handout(window: MainWindow) -> HandoutWindow | None:
@@ -129,7 +130,7 @@ class HandoutWindow(QDialog):
         self._session.changed.connect(self._on_changed)
         self._look.changed.connect(self._on_look_changed)
         self._show_page()
-        self.resize(self._look.px(PANEL) + 640, 780)
+        self.resize(self.sizeHint().boundedTo(self.screen().availableSize() - ROOM_FOR_A_FRAME))
 
     def _action(self, words_: str, keys: QKeySequence.StandardKey) -> QAction:
         action = QAction(words_, self)
@@ -194,6 +195,7 @@ class HandoutWindow(QDialog):
         for action, button in ((self.save_action, self.save), (self.print_action, self.print)):
             action.setEnabled(isinstance(self._page, Handout))
             button.setEnabled(isinstance(self._page, Handout))
+            button.setVisible(isinstance(self._page, Handout))
 
     def _show_ticks(self, found: tuple[Candidate, ...]) -> None:
         while len(self._ticks) > len(found):
