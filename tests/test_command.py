@@ -8,11 +8,16 @@ import os
 import subprocess
 import sys
 from collections.abc import Mapping
+from pathlib import Path
+from typing import Any
 
 import pytest
 
 from fourcount import __main__ as command
 from fourcount import __version__, answer
+from fourcount.publish.answer_file import file_json, file_listing
+from fourcount.record.codec import encode
+from fourcount.wording.example import worked_example
 
 TRIAL = ["15", "85", "5", "95"]
 
@@ -84,6 +89,52 @@ def test_counts_are_read_as_people_type_them(capsys: pytest.CaptureFixture[str])
     assert json.loads(capsys.readouterr().out) == answer(1204, 8796, 1000, 9000)
 
 
+@pytest.mark.parametrize(
+    ("options", "given"),
+    [
+        (
+            ["--baseline", "12% (9 to 15)", "--effect", "odds_ratio"],
+            {"baseline": "12% (9 to 15)", "effect": "odds_ratio"},
+        ),
+        (["--low", "5%", "--baseline", "12%", "--high", "20%"], {"low": "5%", "baseline": "12%", "high": "20%"}),
+        (["--rate", "1% per year", "--span", "2 years"], {"rate": "1% per year", "span": "2 years"}),
+        (["--overall", "12%", "--exposed", "30%"], {"overall": "12%", "exposed": "30%"}),
+        (["--span", "1 year", "--other-span", "5 years"], {"span": "1 year", "other_span": "5 years"}),
+        (
+            ["--adjusted", "OR 0.4 (0.3 to 0.6)", "--design", "cohort"],
+            {"adjusted": "OR 0.4 (0.3 to 0.6)", "design": "cohort"},
+        ),
+        (["--margin", "-2%"], {"margin": "-2%"}),
+    ],
+)
+def test_all_that_is_asked_for_a_patient(
+    options: list[str], given: dict[str, Any], capsys: pytest.CaptureFixture[str]
+) -> None:
+    """Each option is the function's argument of that name."""
+    assert command.main(["answer", *TRIAL, *options, "--json"]) == 0
+    assert json.loads(capsys.readouterr().out) == answer(*map(int, TRIAL), **given)
+    assert command.main(["answer", *TRIAL, *options]) == 0
+    assert capsys.readouterr().out
+
+
+def test_why_nobody_is_carried_is_said(capsys: pytest.CaptureFixture[str]) -> None:
+    """A rate without a time span gives no risk, and the text says what is missing."""
+    assert command.main(["answer", *TRIAL, "--rate", "1% per year"]) == 0
+    assert "time span" in " ".join(capsys.readouterr().out.split())
+
+
+def test_a_record_is_answered_outcome_by_outcome(tmp_path: Path, capsys: pytest.CaptureFixture[str]) -> None:
+    """The text and the dictionary of each outcome of a file."""
+    encoded = encode(worked_example())
+    assert isinstance(encoded, bytes)
+    path = tmp_path / "lights.fourcount"
+    path.write_bytes(encoded)
+    assert command.main(["answer", str(path), "--json"]) == 0
+    assert json.loads(capsys.readouterr().out) == file_json(worked_example())
+    assert command.main(["answer", str(path)]) == 0
+    assert capsys.readouterr().out == file_listing(worked_example())
+
+
 MISTAKES = [
     ["answer"],
     ["answer", "1", "2", "3"],
@@ -118,6 +169,16 @@ MISTAKES = [
     ["answer", *TRIAL, "--bogus"],
     ["answer", *TRIAL, "-x"],
     ["answer", "paper.fourcount"],
+    ["answer", "paper.fourcount", "--level", "90"],
+    ["answer", ""],
+    ["answer", *TRIAL, "--baseline", "120%"],
+    ["answer", *TRIAL, "--low", "20%", "--baseline", "12%"],
+    ["answer", *TRIAL, "--rate", "x"],
+    ["answer", *TRIAL, "--overall", "12%"],
+    ["answer", *TRIAL, "--other-span", "some time"],
+    ["answer", *TRIAL, "--effect", "hr"],
+    ["answer", *TRIAL, "--margin", "1.25"],
+    ["answer", *TRIAL, "--margin", "RR 1.25", "--matters", "RD 5%"],
     ["paper.fourcount"],
     ["handout", "paper.fourcount"],
     ["--bogus"],

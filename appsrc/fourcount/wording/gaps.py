@@ -135,6 +135,8 @@ NOT_CARRIED_EFFECTS = {
 LIMIT_TEXTS = {
     "beyond-one": "The upper limit of the risk would pass 100%, so the interval is open there; "
     "carrying the odds ratio avoids it.",
+    "carried-beyond-zero": "The lower limit of the risk would fall below 0%, so the interval is open there; "
+    "carrying the odds ratio avoids it.",
 }
 """What is said where only a limit is withheld and the estimate stands."""
 

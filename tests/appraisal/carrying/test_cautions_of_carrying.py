@@ -1,0 +1,150 @@
+"""When the cautions of an effect that is carried hold. All figures are invented."""
+
+from __future__ import annotations
+
+import pytest
+
+from forms import at_time, effect_only, of_total, paired, person_time, strata
+from fourcount.appraisal.appraise import appraise
+from fourcount.record.outcome import Patient
+from fourcount.record.paper import Choices
+from fourcount.wording.cautions import caution_text
+
+ADJUSTED = {"adjusted_text": "OR 0.45 (90% CI 0.30 to 0.70)"}
+HAZARDS = {"adjusted_text": "HR 0.6 (0.4 to 0.9)"}
+OVERALL = {"start_kind": "overall", "overall_risk_text": "12%", "exposed_share_text": "30%"}
+OF_CARRYING = {
+    "effect-kept-constant", "effect-kept-elsewhere", "difference-kept-constant", "baseline-far", "baseline-uncertain",
+    "proportional-hazards", "constant-rates", "other-span", "solved-from-overall", "from-a-rate", "crude-carried",
+    "within-pairs", "adjusted-opposite", "adjusted-turned", "carried-level", "converted-limits", "adjusted-converted",
+    "rests-on-baseline", "controls-over-time",
+}  # fmt: skip
+
+
+def facts(make, *arguments, patient=None, **fields):
+    """The facts of the cautions about carrying that hold, by key; each has a sentence without a hole."""
+    outcome = make(
+        *arguments, **fields, patient=Patient(**({"starting_risk_text": "12%"} if patient is None else patient))
+    )
+    held = [one for one in appraise(outcome, Choices()).cautions if one.key in OF_CARRYING]
+    for one in held:
+        said = caution_text(one)
+        assert said.endswith(".")
+        assert not {"{", "…", "this starting risk"} & {
+            word for word in ("{", "…", "this starting risk") if word in said
+        }
+    return {one.key: one.facts for one in held}
+
+
+def test_an_effect_kept_constant_is_named():
+    """A ratio at a bare risk near the study's own: kept constant, and the range leaves the start out."""
+    assert set(facts(of_total)) == {"effect-kept-constant", "baseline-uncertain"}
+
+
+@pytest.mark.parametrize("typed", ["24 of 200", "12% (9 to 15)"])
+def test_a_starting_risk_with_limits_leaves_nothing_out(typed):
+    """The range holds both imprecisions, and the odds ratio's limits are not converted as if it were certain."""
+    found = facts(of_total, patient={"starting_risk_text": typed, "effect": "odds_ratio"})
+    assert set(found) == {"effect-kept-constant"}
+
+
+def test_a_difference_kept_constant_is_doubted_more_than_a_ratio():
+    """Differences vary with the starting risk; of it, the interval leaves nothing out."""
+    found = facts(of_total, patient={"starting_risk_text": "12%", "effect": "risk_difference"})
+    assert set(found) == {"difference-kept-constant"}
+    assert found["difference-kept-constant"]["study"] == pytest.approx(70 / 409)
+    assert facts(effect_only, "risk_difference", "-8% (-13% to -3%)") == {
+        "difference-kept-constant": {"baseline": 0.12}
+    }
+
+
+def test_three_risks_are_each_looked_at_for_their_distance():
+    """5% and 40% lie outside half to twice 17.1%, 12% does not."""
+    typed = {"start_kind": "three", "low_risk_text": "5%", "starting_risk_text": "12%", "high_risk_text": "40%"}
+    outcome = of_total(patient=Patient(**typed))
+    far = [one.facts["baseline"] for one in appraise(outcome, Choices()).cautions if one.key == "baseline-far"]
+    assert far == [0.05, 0.4]
+
+
+@pytest.mark.parametrize(
+    ("make", "rest", "key"),
+    [
+        (effect_only, {}, "proportional-hazards"),
+        (
+            lambda **fields: of_total(design="cohort", adjusted_text="HR 0.6 (0.4 to 0.9)", **fields),
+            {},
+            "proportional-hazards",
+        ),
+        (person_time, {}, "constant-rates"),
+        (of_total, {"other_span_text": "5 years"}, "other-span"),
+        (of_total, {"starting_risk_text": "", "other_span_text": "5 years"}, "other-span"),
+        (of_total, OVERALL, "solved-from-overall"),
+        (of_total, {"start_kind": "rate", "rate_text": "12% per year"}, "from-a-rate"),
+        (lambda **fields: paired("matched", **fields), {}, "within-pairs"),
+        (lambda **fields: paired("paired", **fields), {"effect": "odds_ratio"}, "within-pairs"),
+        (lambda **fields: paired("matched", **fields), {}, "rests-on-baseline"),
+        (lambda **fields: paired("matched", **fields), {}, "controls-over-time"),
+        (paired, {}, "effect-kept-constant"),
+        (at_time, {}, "effect-kept-constant"),
+        (person_time, {}, "effect-kept-elsewhere"),
+        (lambda **fields: of_total(design="cohort", **ADJUSTED, **fields), {}, "adjusted-converted"),
+    ],
+)
+def test_what_each_way_of_carrying_assumes(make, rest, key):
+    """It is said where it is assumed, and not of a table's own risk ratio at a bare risk."""
+    assert key in facts(make, patient={"starting_risk_text": "12%", **rest})
+    assert key in {"effect-kept-constant"} or key not in facts(of_total)
+
+
+def test_a_solved_starting_risk_is_no_bare_one():
+    """What its range leaves out is said in its own words."""
+    assert "baseline-uncertain" not in facts(of_total, patient=OVERALL)
+
+
+def test_a_crude_effect_outside_trials():
+    """Where the paper's adjusted effect is there it could be carried instead, and says so."""
+    alone = facts(of_total, design="cohort")["crude-carried"]
+    beside = facts(of_total, design="cohort", patient={"starting_risk_text": "12%", "effect": "odds_ratio"}, **ADJUSTED)
+    assert ("beside" in alone, beside["crude-carried"]["beside"]) == (False, "adjusted")
+    assert facts(strata)["crude-carried"]["strata"] == 2
+
+
+@pytest.mark.parametrize(
+    ("make", "fields"),
+    [(of_total, {}), (of_total, {"design": "cohort", **ADJUSTED}), (effect_only, {"design": "trial"}), (paired, {})],
+)
+def test_no_crude_effect_in_trials_or_once_adjusted(make, fields):
+    """Randomisation, or the authors' model, deals with it."""
+    assert "crude-carried" not in facts(make, **fields)
+
+
+def test_a_crude_effect_without_a_patient_is_not_carried():
+    """At the study's own risk the figures are the study's, whose own caution speaks."""
+    assert "crude-carried" not in facts(of_total, design="cohort", patient={})
+
+
+def test_an_adjusted_effect_on_the_other_side_is_called_out():
+    """The table says fewer and the print more: perhaps it is of the other group against this one."""
+    found = facts(of_total, design="cohort", adjusted_text="OR 2.2 (1.4 to 3.3)")
+    assert found["adjusted-opposite"] == {"effect": "odds_ratio", "first": "Night lights", "second": "Usual care"}
+    assert "adjusted-opposite" not in facts(of_total, design="cohort", **ADJUSTED)
+
+
+@pytest.mark.parametrize(
+    ("fields", "turned"),
+    [
+        ({}, False),
+        ({"index_group": "second"}, True),
+        ({"counted": "right"}, True),
+        ({"index_group": "second", "counted": "right"}, False),
+    ],
+)
+def test_an_adjusted_effect_that_was_turned_says_so(fields, turned):
+    """It is taken as printed of the first group and the left outcome."""
+    assert turned == ("adjusted-turned" in facts(of_total, design="cohort", **ADJUSTED, **fields))
+
+
+def test_an_adjusted_effect_keeps_the_level_of_its_print():
+    """90% limits stay 90% limits beside a record at 95%."""
+    assert facts(of_total, design="cohort", **ADJUSTED)["carried-level"] == {"level": 0.90, "chosen": 0.95}
+    assert "carried-level" not in facts(of_total, design="cohort", adjusted_text="OR 0.45 (0.30 to 0.70)")
