@@ -9,11 +9,12 @@ from xml.etree import ElementTree as ET
 
 import pytest
 from msgspec.structs import replace
-from PySide6.QtGui import QImage
+from PySide6.QtGui import QColor, QImage
 
 from fourcount.appraisal.appraise import appraise
 from fourcount.ink.handout import MARGIN, PAPERS, PER_MM, Handout, NoPage, compose
 from fourcount.ink.handout_file import DOTS, as_pdf, as_png, as_svg, page_image, writer_for
+from fourcount.ink.palette import PAPER
 from fourcount.picture.common import common_denominator
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
@@ -21,6 +22,13 @@ from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, LONG, SHOWN,
 
 TODAY = date(2026, 12, 1)
 RECORD = Record(title_text="Night lights <b> & more", source_text="table 2")
+
+
+def grey_of(colour: str) -> int:
+    """The shade of a colour where a page is printed in grey."""
+    dot = QImage(1, 1, QImage.Format.Format_RGB32)
+    dot.fill(QColor(colour))
+    return dot.convertToFormat(QImage.Format.Format_Grayscale8).pixelColor(0, 0).lightness()
 
 
 def page_of(*outcomes: Outcome, paper: str = "a4", record: Record = RECORD) -> Handout | NoPage:
@@ -224,11 +232,14 @@ def test_every_kind_of_outcome_makes_a_page(name: str) -> None:
 
 
 def test_states_differ_in_grey() -> None:
-    """In grey the filled, the avoided and the outlined figures still have different shades and shapes."""
+    """In grey, filled figures, outlines and paper are three shades that stand well apart."""
     image = page_image(made(AT_TWELVE), 150).convertToFormat(QImage.Format.Format_Grayscale8)
-    shades = {image.pixelColor(x, y).lightness() // 32 for x in range(90, 500) for y in range(360, 700)}
-    assert {0, 7} <= shades | {0}
-    assert len(shades) >= 3
+    everywhere = ((x, y) for x in range(90, 500) for y in range(360, 700))
+    shades = [image.pixelColor(*spot).lightness() for spot in everywhere]
+    filled, outlined, white = (grey_of(colour) for colour in (PAPER.accent, PAPER.outline, PAPER.page))
+    assert all(shades.count(grey) > 100 for grey in (filled, outlined, white))
+    assert outlined - filled > 30
+    assert white - outlined > 100
 
 
 @pytest.mark.parametrize(
