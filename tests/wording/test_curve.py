@@ -18,8 +18,10 @@ from fourcount.picture.curve_axes import even_marks
 from fourcount.record.outcome import Outcome, Patient
 from fourcount.record.paper import Choices, Record
 from fourcount.wording.curve import (
+    BAR,
     NO_EFFECT,
     NOTHING,
+    OTHER_SPAN,
     CurveRow,
     CurveWords,
     View,
@@ -90,6 +92,29 @@ def test_the_notes_say_what_is_assumed(at_12: Outcome) -> None:
     notes = " ".join(said(at_12).notes)
     assert "That is an assumption" in notes
     assert "The band is the 95% interval of the risk ratio at each starting risk, which is taken as certain" in notes
+
+
+def test_points_have_short_names_and_their_bar_is_explained(at_12: Outcome) -> None:
+    """A point says whose it is and at which risk; the bar is only spoken of where it is drawn."""
+    assert said(at_12).marks == ("study, 17.1%", "patient, 12%")
+    assert BAR in said(at_12).notes
+    assert BAR not in said(at_12, View(place=1)).notes
+
+
+def test_three_starting_risks_are_three_points(at_12: Outcome) -> None:
+    """Low, usual and high are named, and each is said in the sentence."""
+    patient = Patient(start_kind="three", starting_risk_text="12%", low_risk_text="5%", high_risk_text="30%")
+    words = said(msgspec.structs.replace(at_12, patient=patient))
+    assert words.marks == ("study, 17.1%", "patient, low, 5%", "patient, usual, 12%", "patient, high, 30%")
+    assert words.sentence.count("At a starting risk of") == 4
+
+
+def test_another_time_span_is_not_drawn_but_said(at_12: Outcome) -> None:
+    """The curve keeps the study's own span; the patient's point is the risk within it."""
+    outcome = msgspec.structs.replace(at_12, patient=Patient(starting_risk_text="12%", other_span_text="5 years"))
+    assert OTHER_SPAN in said(outcome).notes
+    assert said(outcome).sentence == said(at_12).sentence
+    assert BAR not in said(outcome).notes
 
 
 def test_the_odds_ratio_is_said_as_a_risk_ratio(at_12: Outcome) -> None:

@@ -13,7 +13,7 @@ from fourcount.face.scroll_bar import ScrollBar
 from fourcount.wording import curve_labels as labels
 from fourcount.wording.curve import CurveRow
 
-LEAST = QSize(360, 190)
+LEAST = QSize(360, 240)
 """Pixels at 100% text below which the drawing does not go."""
 
 

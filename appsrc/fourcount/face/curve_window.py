@@ -59,6 +59,13 @@ def open_curve(window: MainWindow) -> CurveWindow:
     return shown
 
 
+class Inside(QWidget):
+    """What is scrolled: as high as its width asks for, whatever its texts would take in a narrower one."""
+
+    def minimumSizeHint(self) -> QSize:
+        return QSize(0, 0)
+
+
 class CurveWindow(QDialog):
     """Follows the record; nothing in it changes the record. ``drawn`` says whether the drawing is that of its words."""
 
@@ -108,7 +115,7 @@ class CurveWindow(QDialog):
             top.addWidget(widget)
         for button in (self.save, self.copy):
             bottom.addWidget(button)
-        inside = QWidget()
+        inside = Inside()
         self._inside = QVBoxLayout(inside)
         self._inside.setContentsMargins(0, 0, 0, 0)
         self._inside.addWidget(self.canvas, 1)

@@ -313,7 +313,11 @@ class CurveLayout:
         for at, name, side in shown:
             place = self._beside(pen, at, name, side, box, taken)
             taken.append(place)
-            pen.text(place[0], (place[1] + place[3]) / 2, name, self.px(SMALL), palette.ink, ground=palette.page)
+            middle = (place[1] + place[3]) / 2
+            if abs(middle - at[1]) > 1.5 * self.px(SMALL) * LINE:
+                near = min(max(at[0], place[0]), place[2])
+                pen.stroke([at, (near, place[1] if middle > at[1] else place[3])], palette.ink, self.px(0.8))
+            pen.text(place[0], middle, name, self.px(SMALL), palette.ink, ground=palette.page)
 
     def _beside(self, pen: Pen, at: Value, name: str, side: int, box: Box, taken: list[Box]) -> Box:
         """Room for the name of a point: beside it, on the side where no line goes on if that is free."""

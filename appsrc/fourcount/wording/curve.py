@@ -18,6 +18,9 @@ ODDS_ITSELF = "the {name} itself"
 STUDY = "the study"
 PATIENT = "this patient"
 BOTH = "the study and this patient"
+SHORT = {STUDY: "study", PATIENT: "patient", BOTH: "study and patient"}
+"""Beside a point there is little room."""
+
 RANKS = {"low": "low", "usual": "usual", "high": "high"}
 FROM_HERE = ", past 100% from {start}"
 UP_TO_HERE = ", below 0% up to {start}"
@@ -172,16 +175,21 @@ def _line_name(outcome: Outcome, line: CurveLine, view: View, curve: Curve) -> s
     return text
 
 
-def _mark_word(mark: CurveMark) -> str:
+def _whose(mark: CurveMark) -> str:
     if mark.of_study:
         return BOTH if mark.of_patient else STUDY
-    rank = RANKS.get(mark.rank, "")
-    return f"{PATIENT}, {rank}" if rank else PATIENT
+    return PATIENT
+
+
+def _mark_word(mark: CurveMark, *, short: bool = False) -> str:
+    """``this patient, low``."""
+    whose, rank = _whose(mark), RANKS.get(mark.rank, "")
+    return ", ".join(part for part in (SHORT[whose] if short else whose, rank) if part)
 
 
 def _mark_name(mark: CurveMark) -> str:
-    """``this patient, 12%``."""
-    return f"{_mark_word(mark)}, {_start(mark)}"
+    """``patient, 12%``."""
+    return f"{_mark_word(mark, short=True)}, {_start(mark)}"
 
 
 def _start(mark: CurveMark) -> str:
@@ -243,10 +251,17 @@ def _notes(outcome: Outcome, findings: OutcomeFindings, curve: Curve, view: View
             for end in (point.low, point.high)
         ):
             found.append(OPEN_BAND)
+        if view.place == curve.carried and any(_barred(mark) for mark in curve.marks):
+            found.append(BAR)
     if not isinstance(findings.patient, Gap) and findings.patient.other_span is not None:
         found.append(OTHER_SPAN)
     found += [LEFT_OUT.format(name=carriable_name(outcome, left)) for left in curve.left_out]
     return tuple(found)
+
+
+def _barred(mark: CurveMark) -> bool:
+    """Whether a point has the limits that a patient is told."""
+    return mark.of_patient and not isinstance(mark.low, Gap) and not isinstance(mark.high, Gap)
 
 
 def _nearest(line: CurveLine, start: float) -> float:
