@@ -131,15 +131,17 @@ def test_the_paper_is_asked_for_the_measure_that_fits(example: Hands) -> None:
     assert check.paper.measure.currentText() == "hazard ratio"
 
 
-@pytest.mark.parametrize("form", ["pairs", "person-time"])
-def test_a_form_that_carries_nothing_says_so_quietly(hands: Hands, form: Form) -> None:
-    """The patient's column has one sentence and no picture."""
-    hands.do(f"form-{form}")
-    hands.count(*TYPED[form])
+def test_rates_ask_for_a_starting_risk(hands: Hands) -> None:
+    """Person-time has no risk of its own: one sentence, no picture, until a risk is typed."""
+    hands.do("form-person-time")
+    hands.count(*TYPED["person-time"])
     patient = hands.window.patient
     assert patient.waits.isVisible()
+    assert patient.baseline.placeholderText() == "needed"
     assert not patient.figures.picture.isVisible()
     assert not patient.figures.copy.isVisible()
+    hands.write(patient.baseline, "12%")
+    assert patient.figures.picture.isVisible()
 
 
 @pytest.mark.parametrize("form", list(TYPED))
@@ -244,16 +246,13 @@ def test_a_key_goes_to_the_kind_of_study(hands: Hands) -> None:
     hands.window.printed.design.hidePopup()
 
 
-@pytest.mark.parametrize("form", ["pairs", "person-time", "effect-only"])
-def test_a_form_that_carries_nothing_asks_for_no_starting_risk(hands: Hands, form: Form) -> None:
+def test_a_figure_that_cannot_be_carried_asks_for_no_starting_risk(hands: Hands) -> None:
     """The fields of the third column are there only where a starting risk would come to something."""
     patient = hands.window.patient
+    hands.fill("effect-only")
     assert patient.baseline.isVisible()
-    hands.fill(form)
-    if form == "effect-only":
-        assert patient.baseline.isVisible()
-        hands.write(hands.focus, "HR 0.72 (0.55 to 0.92)")
-    for field in (patient.baseline, patient.source, patient.effect):
+    hands.write(hands.focus, "rate difference 1.2 (0.3 to 2.1)")
+    for field in (patient.start.kind, patient.baseline, patient.source, patient.effect):
         assert not field.isVisible()
     assert patient.waits.text()
     assert not hands.window.actions_by_key["baseline"].isEnabled()

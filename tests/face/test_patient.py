@@ -94,6 +94,7 @@ def test_another_effect_carries_other_risks(example: Hands) -> None:
     by_ratio = drawn(example).plan.with_risk
     assert [effect.itemText(i) for i in range(effect.count())] == [
         "risk ratio 0.54, kept constant", "odds ratio 0.49, kept constant",
+        "risk difference 7.9 fewer per 100, kept constant",
     ]  # fmt: skip
     example.choose(effect, "odds ratio 0.49, kept constant")
     odds = 0.4 / 0.6 * (38 * 339) / (374 * 70)
@@ -116,9 +117,9 @@ def test_a_risk_over_100_percent_is_refused_and_the_odds_ratio_offered(hands: Ha
     ("typed", "denominator", "note"),
     [
         ("12%", 100, ""),
-        ("1%", 1_000, "Each picture shows 1,000 people."),
-        ("0.1%", 10_000, "Each picture shows 10,000 people."),
-        ("0.0001%", None, "Too small to draw as people."),
+        ("1%", 1_000, "Each picture shows 1,000 people, not 100."),
+        ("0.1%", 10_000, "Each picture shows 10,000 people, not 100."),
+        ("0.0001%", None, "Too small to draw as people. The bars run to 0.1%, not to 100%."),
     ],
 )
 def test_smaller_risks_are_shown_in_more_people(example: Hands, typed: str, denominator: int | None, note: str) -> None:
@@ -134,7 +135,7 @@ def test_bars_instead_of_people_and_back(example: Hands) -> None:
     before = drawn(example)
     example.do("bars")
     assert drawn(example).bars
-    assert drawn(example).words == before.words
+    assert (drawn(example).words.without, drawn(example).words.with_) == (before.words.without, before.words.with_)
     example.type("")
     example.write(example.window.patient.baseline, "12%")
     assert drawn(example).bars
@@ -191,4 +192,4 @@ def test_a_survey_carries_a_prevalence_ratio(example: Hands) -> None:
     """The choice of effect is called as the row is."""
     example.choose(example.window.printed.design, "cross-sectional survey")
     effect = example.window.patient.effect
-    assert [effect.itemText(i).split(" ", 1)[0] for i in range(effect.count())] == ["prevalence", "odds"]
+    assert [effect.itemText(i).split(" ", 1)[0] for i in range(effect.count())] == ["prevalence", "odds", "prevalence"]

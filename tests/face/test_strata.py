@@ -155,7 +155,7 @@ def test_strata_carry_the_pooled_effect(strata: Hands) -> None:
     strata.write(patient.baseline, "12%")
     assert patient.figures.picture.isVisible()
     pooled = strata.rows["pooled_risk_ratio"].split(": ")[1].split(",")[0]
-    assert patient.effect.currentText().startswith(f"risk ratio {pooled}")
+    assert patient.effect.currentText().startswith(f"pooled risk ratio {pooled}")
 
 
 def test_one_table_becomes_the_first_row_and_comes_back(example: Hands) -> None:

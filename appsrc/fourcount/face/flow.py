@@ -15,13 +15,20 @@ class FlowLayout(ItemLayout):
     def __init__(self, look: Look, parent: QWidget | None = None, gap: int = 16) -> None:
         super().__init__(look, parent)
         self._gap = gap
+        self._heights: dict[int, int] = {}
         self.setContentsMargins(0, 0, 0, 0)
 
     def expandingDirections(self) -> Qt.Orientation:
         return Qt.Orientation(0)
 
     def heightForWidth(self, width: int) -> int:
-        return self._flow(QRect(0, 0, width, 0), place=False)
+        if width not in self._heights:  # a layout asks many times
+            self._heights[width] = self._flow(QRect(0, 0, width, 0), place=False)
+        return self._heights[width]
+
+    def invalidate(self) -> None:
+        self._heights.clear()
+        super().invalidate()
 
     def setGeometry(self, rect: QRect) -> None:
         super().setGeometry(rect)

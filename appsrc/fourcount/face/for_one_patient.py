@@ -147,6 +147,9 @@ class ForOnePatient(FieldsView):
         self.effect.show_choice(view.effect)
         self.effect.setEnabled(len(view.effects) > 1)
         self.takes_a_risk, self.has_curve = view.takes_a_risk, view.to_curve
+        self.start.ask(view.takes_a_risk)
+        for widget in (self.source, self.effect, self.names["starting_risk_source_text"], self.names["effect"]):
+            widget.setVisible(view.takes_a_risk)
         for part in (self.start, self.quiet):
             part.show_marks(view.marks)
         marked = [text for field, text in view.marks.items() if field in PATIENT_MARKS]

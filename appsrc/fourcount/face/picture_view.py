@@ -28,6 +28,7 @@ class PictureView(QWidget):
         super().__init__()
         self._look = look
         self.picture: Drawn | None = None
+        self._heights: dict[int, int] = {}
         policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
         policy.setHeightForWidth(True)
         self.setSizePolicy(policy)
@@ -42,6 +43,7 @@ class PictureView(QWidget):
         if picture is not None and picture == self.picture:
             return
         self.picture = picture
+        self._heights.clear()
         self.setVisible(picture is not None)
         self.updateGeometry()
         self.update()
@@ -50,7 +52,11 @@ class PictureView(QWidget):
         return True
 
     def heightForWidth(self, width: int) -> int:
-        return self.picture.height(self._look, width) if self.picture else 0
+        if self.picture is None:
+            return 0
+        if width not in self._heights:  # a layout asks many times
+            self._heights[width] = self.picture.height(self._look, width)
+        return self._heights[width]
 
     def sizeHint(self) -> QSize:
         return QSize(self._look.px(280), self.heightForWidth(max(self.width(), self._look.px(200))))
@@ -65,5 +71,6 @@ class PictureView(QWidget):
             painter.end()
 
     def _on_look_changed(self) -> None:
+        self._heights.clear()
         self.updateGeometry()
         self.update()

@@ -48,6 +48,7 @@ class StartFields(FieldsView):
         self._area = area
         self._source = source
         self._shown: StartKind | None = None
+        self._asked_for = True
         self._fields: dict[str, TextField] = {OWN: own}
         self._heads: dict[str, Words] = {}
         self.kind = ChoiceField(look, START_KIND, tuple(START_KINDS.items()), plain=True, notes=START_NOTES)
@@ -81,6 +82,12 @@ class StartFields(FieldsView):
         for field in self.fields:
             field.show_mark(reasons.get(field.field, ""))
 
+    def ask(self, asked_for: bool) -> None:
+        """Ask for a starting risk, or for none where it would come to nothing."""
+        if asked_for != self._asked_for:
+            self._asked_for = asked_for
+            self._arrange(self._shown or "one")
+
     def _arrange(self, kind: StartKind) -> None:
         """Set the fields of a kind in a line, with a head over each where there are several."""
         focus = next((field for field in self.fields if field.hasFocus()), None)
@@ -91,9 +98,10 @@ class StartFields(FieldsView):
             if len(names) > 1:
                 self._area.addWidget(self._head(name), 0, column)
         for name, field in self._fields.items():
-            field.setVisible(name in names)
+            field.setVisible(self._asked_for and name in names)
         for name, head in self._heads.items():
-            head.setVisible(len(names) > 1 and name in names)
+            head.setVisible(self._asked_for and len(names) > 1 and name in names)
+        self.kind.setVisible(self._asked_for)
         for column in range(3):
             self._area.setColumnStretch(column, 1 if column < len(names) else 0)
         sides = Qt.AlignmentFlag

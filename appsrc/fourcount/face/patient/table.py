@@ -37,6 +37,7 @@ class PatientTable(QWidget):
         self._look = look
         self._rows: tuple[Row, ...] = ()
         self._corner = ""
+        self._laid: dict[int, list[Line]] = {}
         policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
         policy.setHeightForWidth(True)
         self.setSizePolicy(policy)
@@ -51,6 +52,7 @@ class PatientTable(QWidget):
         if (tuple(rows), corner) == (self._rows, self._corner):
             return
         self._rows, self._corner = tuple(rows), corner
+        self._laid.clear()
         self.setVisible(bool(self._rows))
         self.updateGeometry()
         self.update()
@@ -59,8 +61,11 @@ class PatientTable(QWidget):
         return True
 
     def heightForWidth(self, width: int) -> int:
-        laid = self._lay(width)
-        return round(laid[-1].bottom + self._look.px(PAD)) if laid else 0
+        if not self._rows:
+            return 0
+        if width not in self._laid:  # a layout asks many times
+            self._laid[width] = self._lay(width)
+        return round(self._laid[width][-1].bottom + self._look.px(PAD))
 
     def sizeHint(self) -> QSize:
         return QSize(self._look.px(280), self.heightForWidth(max(self.width(), self._look.px(200))))
@@ -114,6 +119,7 @@ class PatientTable(QWidget):
         return [(sum(wide[:place]) + gap * place, each) for place, each in enumerate(wide)]
 
     def _on_look_changed(self) -> None:
+        self._laid.clear()
         self.updateGeometry()
         self.update()
 
