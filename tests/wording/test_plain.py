@@ -9,7 +9,7 @@ import pytest
 from msgspec.structs import replace
 
 from fourcount.appraisal.findings import OutcomeFindings, PatientFindings
-from fourcount.record.outcome import CERTAINTIES, Outcome, Patient
+from fourcount.record.outcome import CERTAINTIES, Outcome, Patient, PersonTime
 from fourcount.wording import plain_texts
 from fourcount.wording.plain import negated, plain_hint, present
 from fourcount.wording.plain_outcome import PlainWords, plain_risks, plain_words, why_not
@@ -82,6 +82,15 @@ def test_a_column_without_a_name_is_said_by_the_other_one() -> None:
     bare = replace(TRIAL, right_words_text="", right_heading_text="", left_heading_text="")
     assert plain_hint(bare, "right") == "do not fall at least once"
     assert plain_hint(bare, "left") == "fall at least once"
+
+
+def test_person_time_has_words_for_the_others_too() -> None:
+    """Its table has events alone; the others are said as typed, else as the lack of the event."""
+    rates = replace(TRIAL, table=PersonTime(unit_text="person-years"))
+    assert plain_hint(rates, "right") == "do not fall"
+    assert (
+        plain_hint(replace(rates, right_words_text="", right_heading_text=""), "right") == "do not fall at least once"
+    )
 
 
 def test_the_page_says_first_both_risks_then_the_difference(say: Callable[..., PlainWords]) -> None:

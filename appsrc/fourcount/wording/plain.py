@@ -78,7 +78,8 @@ def negated(said: str) -> str:
 def plain_hint(outcome: Outcome, column: Column) -> str:
     """What is said of people of this column where the reader types nothing plainer; "" where it has no name."""
     if column == "right" and isinstance(outcome.table, PersonTime):  # which has events and no other column
-        return negated(plain_hint(outcome, "left"))
+        typed = outcome.right_words_text.strip() or outcome.right_heading_text.strip()
+        return present(names.other_words(outcome)) if typed else negated(plain_hint(outcome, "left"))
     viewed = outcome if outcome.counts_left == (column == "left") else count_other_outcome(outcome)
     if viewed.event_words_text.strip() or viewed.event_heading_text.strip():
         return present(names.event_words(viewed))
