@@ -81,7 +81,7 @@ def baseline_uncertain(case: Case) -> Facts | None:
     # A difference kept constant has the same limits at every starting risk.
     if carried.effect == "risk_difference" and carried.other_span is None:
         return None
-    return {"baseline": carried.baseline}
+    return _at(carried)
 
 
 def rests_on_baseline(case: Case) -> Facts | None:
@@ -103,7 +103,10 @@ def solved_from_overall(case: Case) -> Facts | None:
 def from_a_rate(case: Case) -> Facts | None:
     """The starting risk is that of a rate which stays the same."""
     carried = case.carried
-    return {"baseline": carried.baseline} if carried is not None and carried.start_from == "rate" else None
+    # That hazards are taken to stay constant, for another time span, says as much.
+    if carried is None or carried.start_from != "rate" or carried.other_span is not None:
+        return None
+    return {"baseline": carried.baseline}
 
 
 def controls_over_time(case: Case) -> Facts | None:
@@ -118,16 +121,10 @@ def within_pairs(case: Case) -> Facts | None:
     return {} if carried is not None and carried.measure == "pair_odds_ratio" else None
 
 
-def proportional_hazards(case: Case) -> Facts | None:
-    """A hazard ratio is carried: as if it held at every moment of the span."""
-    carried = case.carried
-    return {"baseline": carried.baseline} if carried is not None and carried.effect == "hazard_ratio" else None
-
-
 def constant_rates(case: Case) -> Facts | None:
     """A rate ratio is carried as a hazard ratio is."""
     carried = case.carried
-    return {"baseline": carried.baseline} if carried is not None and carried.effect == "rate_ratio" else None
+    return {} if carried is not None and carried.effect == "rate_ratio" else None
 
 
 def other_span(case: Case) -> Facts | None:
@@ -161,7 +158,7 @@ def adjusted_converted(case: Case) -> Facts | None:
     carried = case.carried
     if carried is None or carried.effect != "odds_ratio" or not carried.adjusted:
         return None
-    return {"baseline": carried.baseline}
+    return _at(carried)
 
 
 def adjusted_opposite(case: Case) -> Facts | None:
@@ -198,6 +195,12 @@ def study_risk(case: Case) -> float | None:
 def _adjusted_beside_counts(case: Case) -> PatientFindings | None:
     carried = case.carried
     return carried if carried is not None and carried.adjusted and not isinstance(case.given, PrintedFigure) else None
+
+
+def _at(carried: PatientFindings) -> Facts:
+    """The starting risk, and that it is the study's own where it is: it has that one's digits then."""
+    facts: Facts = {"baseline": carried.baseline}
+    return {**facts, "start": "reference"} if carried.start_from == "reference" else facts
 
 
 def _sides(case: Case) -> Facts:

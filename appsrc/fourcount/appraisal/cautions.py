@@ -81,7 +81,8 @@ CAUTIONS: tuple[Rule, ...] = (
     Rule(
         key="hazard-ratio",
         holds=form_rules.hazard_ratio,
-        source="Hernan 2010 (the hazards of hazard ratios); Sutradhar and Austin 2018, both from memory",
+        source="Hernan 2010 (the hazards of hazard ratios); Sutradhar and Austin 2018, both from memory; carried: "
+        "Altman and Andersen 1999, BMJ 319:1492",
     ),
     Rule(
         key="events-counted",
@@ -180,11 +181,6 @@ CAUTIONS: tuple[Rule, ...] = (
         key="baseline-far",
         holds=carrying.baseline_far,
         source="Kent 2018 and PATH 2020 (an average effect hides variation with risk); half to twice: common practice",
-    ),
-    Rule(
-        key="proportional-hazards",
-        holds=carrying.proportional_hazards,
-        source="Altman and Andersen 1999, BMJ 319:1492; Hernan 2010, from memory",
     ),
     Rule(
         key="constant-rates",

@@ -128,13 +128,14 @@ def events_counted(case: Case) -> Facts | None:
 
 
 def hazard_ratio(case: Case) -> Facts | None:
-    """A hazard ratio is a ratio of rates that is taken to stay the same over time."""
+    """A hazard ratio is a ratio of rates that is taken to stay the same over time; ``carried`` says that it is used."""
     printed = case.given if isinstance(case.given, PrintedFigure) else case.extras.adjusted
     if printed is None or printed.measure != "hazard_ratio" or printed.estimate is None:
         return None
     figure = case.figures.get("hazard_ratio")
     shown = printed.estimate.value if figure is None or isinstance(figure.estimate, Gap) else figure.estimate
-    return {"value": shown}
+    used = case.carried is not None and case.carried.effect == "hazard_ratio"
+    return {"value": shown, "carried": "hazard_ratio"} if used else {"value": shown}
 
 
 def cannot_be_checked(case: Case) -> Facts | None:

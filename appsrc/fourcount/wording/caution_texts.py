@@ -221,16 +221,9 @@ TEXTS = {
             "differences vary with the starting risk more than ratios do."
         ),
     ),
-    "proportional-hazards": (
-        "A hazard ratio carried",
-        (
-            "The hazard ratio is assumed to stay the same over the whole time and at {baseline}, and other events that "
-            "compete are left out."
-        ),
-    ),
     "constant-rates": (
         "A rate ratio carried",
-        "Both groups’ rates are assumed to stay constant over the time, and their ratio to be the same at {baseline}.",
+        "Carrying a rate ratio takes both groups’ rates to stay constant over the time span.",
     ),
     "other-span": (
         "Another time span",
@@ -252,10 +245,7 @@ TEXTS = {
     ),
     "crude-carried": (
         "A crude effect carried",
-        (
-            "The {effect} carried to {baseline} is crude, so other differences between the groups go with it; an "
-            "adjusted effect from the paper would be better."
-        ),
+        "The {effect} carried to {baseline} is the crude one; an adjusted one, where the paper prints it, is better.",
     ),
     "within-pairs": (
         "An odds ratio of pairs",

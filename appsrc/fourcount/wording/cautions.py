@@ -34,8 +34,11 @@ DIFFERENCE_KEPT_CONSTANT = (
     "starting risk more than ratios do."
 )
 CRUDE_BESIDE_ADJUSTED = (
-    "The {effect} carried to {baseline} is crude, so other differences between the groups go with it; the paper’s "
-    "adjusted effect can be carried instead."
+    "The {effect} carried to {baseline} is the crude one; the paper’s adjusted effect can be carried instead."
+)
+HAZARD_RATIO_CARRIED = (
+    "The hazard ratio of {value} is a ratio of rates among those still without the event, and no risk ratio. Carrying "
+    "it takes it to stay the same over the whole time span, and leaves out other events that compete."
 )
 SAID_OF_THE_PATIENT = ("baseline-uncertain",)
 """The cautions that the patient's own words say already, wherever both stand together."""
@@ -49,10 +52,7 @@ OVER_STRATA = {
         "A {design} does not assign its groups: pooling deals with what the strata differ in and with nothing else, "
         "and the crude figures not even with that. Other differences between the groups may explain them."
     ),
-    "crude-carried": (
-        "The {effect} carried to {baseline} is pooled over the strata and no more, so what else differs between the "
-        "groups goes with it."
-    ),
+    "crude-carried": "The {effect} carried to {baseline} is pooled over the strata and adjusted for nothing else.",
     "crude-beside-adjusted": (
         "The figures of this table are crude, or pooled over its strata and no more; the paper’s own {measure}, "
         "adjusted{adjusted_for}, is {value}."
@@ -93,6 +93,8 @@ def _template(caution: Caution) -> str:
         return RATIO_KEPT_CONSTANT
     if key == "difference-kept-constant" and "study" in facts:
         return DIFFERENCE_KEPT_CONSTANT
+    if key == "hazard-ratio" and "carried" in facts:
+        return HAZARD_RATIO_CARRIED
     if key == "crude-carried" and "beside" in facts:
         return CRUDE_BESIDE_ADJUSTED
     if key == "observational" and facts.get("design") == "matched":
@@ -111,6 +113,8 @@ def _said(caution: Caution) -> dict[str, str]:
     """Facts whose words depend on the caution, or on another fact, rather than on their own name."""
     facts = caution.facts
     said: dict[str, str] = {}
+    if facts.get("start") == "reference" and isinstance(facts.get("baseline"), float):
+        said["baseline"] = numbers.percent(float(facts["baseline"]))
     if "reason" in facts:
         said["reason"] = gap_text(Gap(str(facts["reason"])))
     if "counts" in facts:

@@ -15,7 +15,7 @@ HAZARDS = {"adjusted_text": "HR 0.6 (0.4 to 0.9)"}
 OVERALL = {"start_kind": "overall", "overall_risk_text": "12%", "exposed_share_text": "30%"}
 OF_CARRYING = {
     "effect-kept-constant", "effect-kept-elsewhere", "difference-kept-constant", "baseline-far", "baseline-uncertain",
-    "proportional-hazards", "constant-rates", "other-span", "solved-from-overall", "from-a-rate", "crude-carried",
+    "hazard-ratio", "constant-rates", "other-span", "solved-from-overall", "from-a-rate", "crude-carried",
     "within-pairs", "adjusted-opposite", "adjusted-turned", "carried-level", "converted-limits", "adjusted-converted",
     "rests-on-baseline", "controls-over-time",
 }  # fmt: skip
@@ -69,11 +69,11 @@ def test_three_risks_are_each_looked_at_for_their_distance():
 @pytest.mark.parametrize(
     ("make", "rest", "key"),
     [
-        (effect_only, {}, "proportional-hazards"),
+        (effect_only, {}, "hazard-ratio"),
         (
             lambda **fields: of_total(design="cohort", adjusted_text="HR 0.6 (0.4 to 0.9)", **fields),
             {},
-            "proportional-hazards",
+            "hazard-ratio",
         ),
         (person_time, {}, "constant-rates"),
         (of_total, {"other_span_text": "5 years"}, "other-span"),
@@ -94,6 +94,25 @@ def test_what_each_way_of_carrying_assumes(make, rest, key):
     """It is said where it is assumed, and not of a table's own risk ratio at a bare risk."""
     assert key in facts(make, patient={"starting_risk_text": "12%", **rest})
     assert key in {"effect-kept-constant"} or key not in facts(of_total)
+
+
+def test_a_hazard_ratio_that_is_carried_says_what_that_takes_for_granted():
+    """One caution says it, in other words where the hazard ratio is only shown."""
+    assert facts(effect_only)["hazard-ratio"] == {"value": 0.72, "carried": "hazard_ratio"}
+    assert facts(effect_only, patient={})["hazard-ratio"] == {"value": 0.72}
+
+
+def test_a_rate_over_another_span_is_said_to_be_constant_once():
+    """That hazards go on as they are says it of both groups."""
+    typed = {"start_kind": "rate", "rate_text": "12% per year", "other_span_text": "5 years"}
+    assert "from-a-rate" not in facts(of_total, patient=typed)
+
+
+def test_an_adjusted_odds_ratio_at_the_studys_own_risk_names_it_as_the_study_does():
+    """70 of 409 is 17.1% in the table and in the caution."""
+    outcome = of_total(design="cohort", **ADJUSTED)
+    (said,) = [caution_text(one) for one in appraise(outcome, Choices()).cautions if one.key == "adjusted-converted"]
+    assert "at 17.1% as if" in said
 
 
 def test_a_solved_starting_risk_is_no_bare_one():

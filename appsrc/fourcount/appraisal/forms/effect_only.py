@@ -122,10 +122,12 @@ def _study(printed: PrintedFigure, figure: Figure, outcome: Outcome) -> Study:
     """The printed effect itself, at a starting risk that has to be typed."""
     one = of_print(printed, figure, outcome, adjusted=is_adjusted(printed, outcome))
     needed = SUPPORT[outcome.design].patient_number_needed
+    counted_events = printed.measure == "rate_ratio" and outcome.counting == "events"
     return Study(
         outcome=outcome,
         carriable=() if one is None else (one,),
         needs="difference-needs-baseline" if printed.measure == "risk_difference" else "effect-needs-baseline",
         odds_ratio=one if one is not None and one.effect == "odds_ratio" else None,
         number_needed="design-before-after" if outcome.design == "before-after" else needed,
+        refused=Gap("events-not-people") if counted_events else None,
     )
