@@ -5,7 +5,7 @@ from __future__ import annotations
 from typing import Any
 
 import pytest
-from PySide6.QtGui import QGuiApplication
+from PySide6.QtGui import QContextMenuEvent, QGuiApplication
 
 pytestmark = pytest.mark.real_window
 
@@ -60,6 +60,19 @@ def test_every_form_is_reached_by_its_key(hands: Any, qtbot: Any) -> None:
     assert hands.window.printed.rare.panel.isVisible()
     hands.press("Escape")
     assert hands.field == "strata.2.label_text"
+
+
+def test_the_menu_of_a_tab_is_about_that_tab(example: Any, qtbot: Any) -> None:
+    """Pressed with the right button a tab comes into view, and its menu opens with what can be done to it."""
+    example.do("outcome-copy")
+    tabs = example.window.header.bar.tabs
+    place = tabs.tabRect(0).center()
+    event = QContextMenuEvent(QContextMenuEvent.Reason.Mouse, place, tabs.mapToGlobal(place))
+    QGuiApplication.sendEvent(tabs, event)
+    menu = example.window.menus["outcomes"]
+    qtbot.waitUntil(menu.isVisible)
+    assert example.window.session.view == 0
+    menu.close()
 
 
 def test_the_picture_reaches_the_clipboard(example: Any) -> None:

@@ -65,7 +65,8 @@ class Settings:
 
         icons, arrangement = str(self._store.value("icons", "")), str(self._store.value("arrangement", ""))
         known = next((name for name in ICONS if name == icons), ICONS[0])
-        return known, next((name for name in ARRANGEMENTS if name == arrangement), ARRANGEMENTS[0])
+        kept = next((name for name in ARRANGEMENTS if name == arrangement != "bars"), ARRANGEMENTS[0])
+        return known, kept  # bars are drawn on demand
 
     def keep(self, **values: object) -> None:
         """Remember values by name."""
