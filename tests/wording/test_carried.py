@@ -2,21 +2,19 @@
 
 from __future__ import annotations
 
-import msgspec
 import pytest
 
 from carried_patients import carried, effect, findings_with, with_counts
 from forms import at_time, effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.findings import Gap, Interval
+from fourcount.appraisal.findings import Interval
 from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
 from fourcount.wording.basis import basis
-from fourcount.wording.patient import missing, patient_words
+from fourcount.wording.patient import patient_words
 from fourcount.wording.patient_sentence import AS_IN_THE_STUDY, patient_sentence
-from fourcount.wording.patient_table import patient_table, patient_table_head
-from fourcount.wording.subject import subject
+from fourcount.wording.patient_table import patient_table
 
 RR, OR, HR = effect(0.54, 0.37, 0.78), effect(0.49, 0.32, 0.75), effect(0.72, 0.55, 0.92)
 UP, RD = effect(1.86, 1.29, 2.69), effect(-0.079, -0.126, -0.033)
@@ -226,28 +224,6 @@ def test_the_adjusted_effect_beside_counts_keeps_its_level():
     assert "90% interval" in words.with_interval
 
 
-def test_one_head_names_one_level():
-    """The study's own risk has its interval at the chosen level, so beside a print's other level it has none here."""
-    outcome = of_total(design="cohort", adjusted_text="OR 0.47 (90% CI 0.30 to 0.72)", adjusted_for_text="age")
-    found = appraise(outcome, Choices())
-    words = patient_words(outcome, found, Choices(), 100)
-    assert (words.without_interval, words.with_interval) == ("", "90% interval 6 to 13")
-    (row,) = patient_table(outcome, found, Choices(), 100)
-    assert (row.without, row.with_) == ("17", "9 (6 to 13)")
-    same = patient_words(outcome, appraise(outcome, Choices(level=0.9)), Choices(level=0.9), 100)
-    assert same.without_interval.startswith("90% interval ")
-
-
-def test_a_table_over_another_span_names_both_spans():
-    """The starting risk is one of the study's span, and the figures are over the other."""
-    outcome = of_total(patient=typed(other_span_text="5 years"))
-    found = appraise(outcome, Choices())
-    assert patient_table(outcome, found, Choices())[0].label == "12% over 12 months"
-    assert (
-        patient_table_head(outcome, found, Choices()).with_ == "With: night lights, over 5 years, in 100 (95% interval)"
-    )
-
-
 def test_a_rate_is_a_risk_over_any_span():
     """Without a span of the study nothing is carried from one span to another."""
     start = Patient(start_kind="rate", rate_text="12 per 1,000 person-years", other_span_text="10 years")
@@ -257,69 +233,6 @@ def test_a_rate_is_a_risk_over_any_span():
         "Starting risk 11.31% (from 12 per 1,000 person-years over 10 years), rate ratio 0.54"
     )
     assert words.basis.endswith("kept constant.")
-
-
-LOW, HIGH = carried("risk_ratio", RR, 0.05, rank="low"), carried("risk_ratio", RR, 0.25, rank="high")
-THREE = of_total(patient=typed(start_kind="three", low_risk_text="5%", high_risk_text="25%"))
-
-
-def test_low_usual_and_high_stand_in_one_table_on_one_number_of_people():
-    """Without, with, difference and number needed, each with its range."""
-    patient = carried("risk_ratio", RR, 0.12, rank="usual", low=LOW, high=HIGH)
-    found = findings_with(THREE, patient)
-    assert patient_table(THREE, found, Choices(), 100) == [
-        ("Low, 5%", "5", "3 (2 to 4)", "2 fewer (1 to 3)", "NNTB 44 (32 to 91)"),
-        ("Usual, 12%", "12", "6 (4 to 9)", "6 fewer (3 to 8)", "NNTB 19 (14 to 38)"),
-        ("High, 25%", "25", "14 (9 to 20)", "12 fewer (6 to 16)", "NNTB 9 (7 to 19)"),
-    ]
-    assert patient_table_head(THREE, found, Choices(), 100) == (
-        "Starting risk",
-        "Without: usual care, in 100 (95% interval)",
-        "With: night lights, in 100 (95% interval)",
-        "Difference, in 100 (95% interval)",
-        "Number needed (95% interval)",
-    )
-
-
-def test_one_starting_risk_is_one_row():
-    """Its label is the risk; the study's own is said to be."""
-    outcome = of_total(patient=typed())
-    (row,) = patient_table(outcome, findings_with(outcome, carried("risk_ratio", RR, 0.12)), Choices())
-    assert row == ("12%", "12", "6 (4 to 9)", "6 fewer (3 to 8)", "NNTB 19 (14 to 38)")
-    own = carried("risk_ratio", RR, 0.171, range_from="table", **AT_OWN)
-    assert patient_table(of_total(), findings_with(of_total(), own), Choices())[0].label == "The study’s own, 17.1%"
-
-
-def test_a_table_takes_more_people_only_where_somebody_would_be_nobody():
-    """0.4% of 100 would be nobody."""
-    low = carried("risk_ratio", RR, 0.004, rank="low")
-    found = findings_with(THREE, carried("risk_ratio", RR, 0.12, rank="usual", low=low, high=HIGH))
-    rows = patient_table(THREE, found, Choices(), 100)
-    assert [row.without for row in rows] == ["4", "120", "250"]
-    assert "in 1,000" in patient_table_head(THREE, found, Choices(), 100).without
-
-
-def test_a_rank_that_gives_nothing_says_why():
-    """In its row, and in its line."""
-    high = carried("risk_ratio", UP, 0.6, rank="high")
-    patient = carried("risk_ratio", UP, 0.12, rank="usual", low=Gap("baseline-unreadable"), high=high)
-    outcome = msgspec.structs.replace(THREE, index_group="second")
-    found = findings_with(outcome, patient, OR)
-    rows = patient_table(outcome, found, Choices())
-    assert rows[0] == ("Low", "The starting risk cannot be read; 12% or 12 in 100 would do.", "", "", "")
-    assert rows[2].with_ == "The risk would pass 100% here; the odds ratio can be carried instead."
-    assert patient_words(outcome, found, Choices(), 100).ranks == (
-        "At the low starting risk: the starting risk cannot be read; 12% or 12 in 100 would do.",
-        "At the high starting risk of 60%: the risk would pass 100% here; the odds ratio can be carried instead.",
-    )
-
-
-def test_no_patient_has_no_table():
-    """Nothing carried, nothing to list; the heads stand."""
-    outcome = effect_only()
-    found = msgspec.structs.replace(findings_with(outcome, carried("hazard_ratio", HR, 0.2)), patient=Gap("not-typed"))
-    assert patient_table(outcome, found, Choices()) == []
-    assert patient_table_head(outcome, found, Choices()).without == "Without: usual care"
 
 
 @pytest.mark.parametrize(
@@ -368,64 +281,8 @@ def test_no_effect_is_the_same_number():
     assert row.difference == "the same number (4 fewer to 5 more)"
 
 
-def test_a_matched_study_is_turned_to_those_who_had_the_exposure():
-    """Cases and controls were compared by exposure; a patient asks what the exposure does."""
-    words = {"left_words_text": "took the drug", "right_words_text": "did not take the drug"}
-    outcome = paired("matched", first_label_text="", second_label_text="", patient=typed("2%"), **words)
-    patient = carried("odds_ratio", effect(2.0, 1.3, 3.2), 0.02, measure="pair_odds_ratio")
-    found = words_of(outcome, patient)
-    assert (found.without_title, found.with_title) == ("People who did not take the drug", "People who took the drug")
-    assert found.picture_sentence.startswith(
-        "Of 100 people who did not take the drug 2 (2%) became cases within 12 months and 98 did not; of 100 who took "
-        "the drug 4 (4%) became cases and 96 did not: 2 more in 100"
-    )
-    turned = msgspec.structs.replace(outcome, index_group="second")
-    assert words_of(turned, patient).with_title == "People who did not take the drug"
-    assert words_of(msgspec.structs.replace(turned, counted="right"), patient).with_title == "People who took the drug"
-
-
-@pytest.mark.parametrize(
-    ("label", "event"),
-    [
-        ("", "became cases"),
-        ("Cases", "became cases"),
-        ("Hip fractures", "had hip fractures"),
-        ("Stroke cases", "had the event “stroke”"),
-        ("Cases of stroke", "had the event “stroke”"),
-    ],
-)
-def test_cases_are_called_after_what_they_had(label, event):
-    """By the label that the reader gave them."""
-    outcome = paired("matched", first_label_text=label, second_label_text="", left_words_text="took the drug")
-    assert subject(outcome).left_words_text == event
-
-
-def test_a_matched_study_has_to_name_the_exposure_and_the_event():
-    """ "Became cases" says nothing to a patient, nor "were exposed"."""
-    bare = {"first_label_text": "", "second_label_text": "", "left_words_text": "", "right_words_text": ""}
-    assert missing(paired("matched", **bare)) == ("the event", "the reference group", "the index group")
-    named = {**bare, "first_label_text": "Hip fractures", "left_words_text": "was treated"}
-    assert missing(paired("matched", **named)) == ()
-    spoken = subject(paired("matched", **named))
-    assert (spoken.first_label_text, spoken.second_label_text) == (
-        "people who were treated",
-        "people who were not treated",
-    )
-
-
-def test_before_and_after_are_times():
-    """Nobody is without or with anything."""
-    outcome = paired("before-after", first_label_text="after", second_label_text="before", patient=typed("30%"))
-    patient = carried("risk_ratio", effect(0.71, 0.5, 0.98), 0.3, measure="pair_ratio", gap="design-before-after")
-    words = words_of(outcome, patient)
-    assert (words.without_title, words.with_title) == ("Before", "After")
-    assert words.picture_sentence.startswith(
-        "Of 100 people 30 (30%) fell at least once within 12 months before and 70 "
-    )
-    said = patient_sentence(outcome, findings_with(outcome, patient), Choices())
-    assert said.startswith(
-        "Of 100 people 30 fell at least once within 12 months before and 21 (95% interval 15 to 29) after"
-    )
+LOW, HIGH = carried("risk_ratio", RR, 0.05, rank="low"), carried("risk_ratio", RR, 0.25, rank="high")
+THREE = of_total(patient=typed(start_kind="three", low_risk_text="5%", high_risk_text="25%"))
 
 
 def test_a_letter_says_all_of_it():
