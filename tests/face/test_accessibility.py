@@ -32,9 +32,12 @@ def open_all_rows(hands: Hands) -> None:
     """Open every row that few papers need."""
     optional = hands.window.printed.rare.optional
     assert optional is not None
-    for link in optional.links.values():
+    patient = hands.window.patient
+    for link in (*optional.links.values(), *patient.quiet.links.values()):
         if link.isVisible():
             link.click()
+    hands.do("own-line")
+    hands.do("outcome-copy")
 
 
 @pytest.mark.parametrize("form", FORMS)
@@ -52,7 +55,10 @@ def test_every_target_is_large_enough(hands: Hands, form: str) -> None:
     assert small == []
 
 
-@pytest.mark.parametrize("state", ["first start", "example", "wrong", "case-control", "more", "rows", "paste", *FORMS])
+@pytest.mark.parametrize(
+    "state",
+    ["first start", "example", "wrong", "case-control", "more", "rows", "paste", "three", "rate", "overall", *FORMS],
+)
 def test_everything_that_takes_the_focus_has_a_name(hands: Hands, state: str) -> None:
     """In every state of the window each control says what it is."""
     if state != "first start":
@@ -61,6 +67,8 @@ def test_everything_that_takes_the_focus_has_a_name(hands: Hands, state: str) ->
         hands.write(hands.window.printed.grid.cells["first_left_text"], "abc")
     if state == "case-control":
         hands.choose(hands.window.printed.design, "case-control study")
+    if state in ("three", "rate", "overall"):
+        hands.window.commands.choose("start_kind", state)
     if state == "more":
         hands.do("more")
     if state == "rows":

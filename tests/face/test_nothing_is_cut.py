@@ -11,10 +11,11 @@ from fourcount.face.cell import CountCell
 from fourcount.face.fields import ChoiceField
 from fourcount.face.links import Link
 from fourcount.face.measure_row import MeasureRow
+from fourcount.face.patient.table import PatientTable
 from fourcount.face.picture_view import PictureView
 from fourcount.face.text import Words
 from fourcount.record import editing
-from fourcount.record.outcome import CELLS, FORMS, Design, Form
+from fourcount.record.outcome import CELLS, FORMS, START_KINDS, Design, Form, StartKind
 from fourcount.wording.example import worked_example
 
 SIZES = ((1280, 800), (1024, 700), (700, 600), (1920, 1080))
@@ -29,7 +30,7 @@ def cut(window: Any) -> list[str]:
     page = window.page
     for widget in page.findChildren(QWidget):
         if (
-            not isinstance(widget, Words | MeasureRow | PictureView | CountCell | ChoiceField | Link)
+            not isinstance(widget, Words | MeasureRow | PictureView | PatientTable | CountCell | ChoiceField | Link)
             or not widget.isVisible()
         ):
             continue
@@ -57,6 +58,35 @@ def test_nothing_is_cut(open_window: Any, qtbot: Any, design: Design) -> None:
             window.look.set_zoom(zoom)
             qtbot.waitUntil(lambda: cut(window) == [])
             assert window.page_scroll.horizontalScrollBar().maximum() == 0
+
+
+@pytest.mark.parametrize("kind", START_KINDS)
+def test_nothing_is_cut_for_any_patient(open_window: Any, qtbot: Any, kind: StartKind) -> None:
+    """Every way of giving a starting risk, its rarer rows open, both pictures, a line, and many outcomes."""
+    record = worked_example()
+    outcome = editing.with_line_kind(editing.with_start_kind(record.outcomes[0], kind), "margin")
+    texts = {
+        "starting_risk_text": "12% (9 to 15)", "low_risk_text": "8%", "high_risk_text": "20%",
+        "rate_text": "12 per 1,000 person-years", "overall_risk_text": "10%", "exposed_share_text": "30%",
+        "other_span_text": "3 years", "line_text": "5", "starting_risk_source_text": "our own register",
+    }  # fmt: skip
+    for field, text in texts.items():
+        outcome = editing.edit_text(outcome, field, text)
+    record = editing.with_outcome(record, 0, outcome)
+    for _ in range(6):
+        record = editing.copy_outcome(record, 1)
+    window = open_window(record)
+    qtbot.waitUntil(window.patient.figures.picture.isVisible)
+    for link in window.patient.quiet.links.values():
+        link.click()
+    window.actions_by_key["relative"].trigger()
+    for width, height in ((1280, 800), (1024, 700), (700, 600), (480, 600)):
+        for zoom in (1.0, 1.5, 2.0):
+            if width / zoom < NARROWEST:
+                continue
+            window.resize(width, height)
+            window.look.set_zoom(zoom)
+            qtbot.waitUntil(lambda: cut(window) == [])
 
 
 CELLS_OF: dict[Form, tuple[str, str, str, str]] = {
