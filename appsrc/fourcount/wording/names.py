@@ -2,9 +2,8 @@
 
 from __future__ import annotations
 
-from typing import Literal
+from typing import TYPE_CHECKING, Literal
 
-from fourcount.appraisal.findings.patient import CarriedEffect
 from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import (
     Column,
@@ -18,6 +17,9 @@ from fourcount.record.outcome import (
     RiskAtTime,
 )
 from fourcount.wording import event_names
+
+if TYPE_CHECKING:
+    from fourcount.appraisal.findings.patient import CarriedEffect
 
 Group = Literal["index", "reference"]
 
