@@ -171,6 +171,7 @@ MISTAKES = [
     ["answer", "paper.fourcount"],
     ["answer", "paper.fourcount", "--level", "90"],
     ["answer", ""],
+    ["answer", "38"],
     ["answer", *TRIAL, "--baseline", "120%"],
     ["answer", *TRIAL, "--low", "20%", "--baseline", "12%"],
     ["answer", *TRIAL, "--rate", "x"],

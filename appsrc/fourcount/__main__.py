@@ -70,7 +70,7 @@ def _answer(given: list[str]) -> int:
         return _say(f"fourcount {__version__}\n")
     if unknown:
         raise MistypedError(words.UNKNOWN.format(kind="option", text=_quoted(unknown[0])))
-    if len(wanted.counts) == 1:
+    if len(wanted.counts) == 1 and not wanted.counts[0].strip().isdigit():
         return _answer_file(wanted, given)
     question = _question(wanted)
     from fourcount.appraisal.appraise import appraise
