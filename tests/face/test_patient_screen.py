@@ -7,7 +7,7 @@ from collections.abc import Callable
 import pytest
 from msgspec.structs import replace
 from PySide6.QtCore import Qt
-from PySide6.QtGui import QAccessible, QColor, QKeySequence
+from PySide6.QtGui import QAccessible, QColor, QImage, QKeySequence
 from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QAbstractButton, QApplication
 from pytestqt.qtbot import QtBot
@@ -167,6 +167,27 @@ def test_the_range_is_one_click_away(opened: Opened) -> None:
     assert screen.grab().toImage() != before
     QTest.mouseClick(screen.range, Qt.MouseButton.LeftButton)
     assert screen.grab().toImage() == before
+
+
+def at_one_size(screen: PatientScreen) -> QImage:
+    """The page as it is drawn in a window of 1,000 by 700."""
+    screen.showNormal()
+    screen.resize(1000, 700)
+    QApplication.sendPostedEvents()
+    return screen.canvas.grab().toImage()
+
+
+@pytest.mark.parametrize("drawn", [{"icons": "dot"}, {"arrangement": "one"}, {"arrangement": "bars"}], ids=str)
+def test_it_draws_as_the_clinician_chose(opened: Opened, drawn: dict[str, str]) -> None:
+    """Icons and arrangement are those of the window; the range and the relative picture never come uncalled."""
+    window, screen = opened(TRIAL)
+    usual = at_one_size(screen)
+    screen.close()
+    window.patient.set_options(window.patient.options._replace(**drawn, uncertainty=True, relative=True))
+    other = open_screen(window)
+    assert other is not None
+    assert other.range.text() == "Show the range"
+    assert at_one_size(other) != usual
 
 
 def test_it_follows_the_record(opened: Opened, qtbot: QtBot) -> None:

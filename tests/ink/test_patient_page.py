@@ -9,7 +9,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.ink.palette import PAPER, contrast
 from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
 from fourcount.ink.patient_page import PatientPage
-from fourcount.ink.plain_picture import Shown, shown
+from fourcount.ink.plain_picture import Shown, picture_words, shown
 from fourcount.picture.options import USUAL
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
@@ -105,6 +105,17 @@ def test_the_range_is_drawn_only_where_it_is_asked_for() -> None:
     assert plain.plan.with_.uncertain == 0
     assert ranged.words.range_ == "With night lights, it could be from 7 to 12 in 100."
     assert ranged.plan.with_.uncertain == 12 - 7
+
+
+def test_one_array_says_what_it_shows_of_both_groups() -> None:
+    """In one array, filled figures have it with both, and outlined ones with neither."""
+    it = ready(AT_TWELVE)
+    key = {
+        entry.state: entry.text for entry in picture_words(it._replace(options=USUAL._replace(arrangement="one"))).key
+    }
+    assert key["affected"] == "fall at least once with both"
+    assert key["others"] == "do not fall with both"
+    assert {entry.text for entry in picture_words(it).key} >= {"fall at least once", "do not fall"}
 
 
 def test_what_is_too_small_to_draw_speaks_of_whole_people() -> None:

@@ -17,12 +17,12 @@ from fourcount.face.scroll_bar import ScrollBar
 from fourcount.face.text import Words
 from fourcount.ink.patient_page import PatientPage
 from fourcount.ink.plain_picture import Shown, shown
-from fourcount.picture.options import USUAL, PictureOptions
 from fourcount.wording import plain_texts
 from fourcount.wording.plain_outcome import why_not as why_no_screen
 
 if TYPE_CHECKING:
     from fourcount.face.window import MainWindow
+    from fourcount.picture.options import PictureOptions
     from fourcount.record.paper import Record
 
 __all__ = ["PatientScreen", "open_screen", "why_no_screen"]
@@ -116,6 +116,7 @@ class PatientScreen(QWidget):
         self._session = window.session
         self._look = OnWhite(window.look)
         self._look.setParent(self)
+        self._options: PictureOptions = window.patient.options  # icons and arrangement as the clinician chose them
         self._range = False
         self._place = 0
         self._pages: list[int] = []
@@ -186,7 +187,7 @@ class PatientScreen(QWidget):
     def _shown(self, place: int) -> Shown | None:
         record: Record = self._session.record
         outcome = record.outcomes[place]
-        options: PictureOptions = USUAL._replace(uncertainty=self._range)
+        options = self._options._replace(uncertainty=self._range, relative=False)
         return shown(outcome, appraise(outcome, record.choices), options)
 
     def _show(self) -> None:

@@ -134,12 +134,13 @@ def caption(style: PaperStyle, side: PlainSide) -> tuple[Sequence[Run], Sequence
 def picture_words(it: Shown) -> PictureWords:
     """The words inside the picture of an outcome."""
     words, plan = it.words, it.plan
+    pattern = plain_texts.EITHER_WAY if it.options.arrangement == "one" else "{words}"
     entries = (
-        KeyEntry("affected", words.event),
+        KeyEntry("affected", pattern.format(words=words.event)),
         KeyEntry("added", words.added),
         KeyEntry("uncertain", plain_texts.EITHER),
         KeyEntry("avoided", words.avoided),
-        KeyEntry("others", words.other),
+        KeyEntry("others", pattern.format(words=words.other)),
     )
     low, _, high = axis_words("risk", bar_pair(plan).top)
     return PictureWords(
