@@ -261,6 +261,23 @@ def test_figures_do_not_stay(outcome: Outcome, monkeypatch: pytest.MonkeyPatch) 
     assert all(figure() is None for figure in kept)
 
 
+def test_the_dots_of_a_drawing_are_freed_at_once(outcome: Outcome, monkeypatch: pytest.MonkeyPatch) -> None:
+    """No collector has to run before the megabytes of a picture are free again."""
+    from matplotlib.backends.backend_agg import FigureCanvasAgg
+
+    renderers = []
+    get = FigureCanvasAgg.get_renderer
+
+    def got(self):
+        renderers.append(get(self))
+        return renderers[-1]
+
+    monkeypatch.setattr(FigureCanvasAgg, "get_renderer", got)
+    made(outcome)
+    assert renderers
+    assert not any(vars(renderer) for renderer in renderers)
+
+
 def test_the_list_of_fonts_has_a_folder_of_the_programs_own(monkeypatch: pytest.MonkeyPatch) -> None:
     """While the library loads it is pointed to the program's cache, and the environment is as before afterwards."""
     monkeypatch.delenv("MPLCONFIGDIR", raising=False)

@@ -65,14 +65,16 @@ def draw_curve(
         from matplotlib.figure import Figure
 
         figure = Figure(figsize=(sheet.width / 72, sheet.height / 72), dpi=72 * sheet.ratio, facecolor=palette.page)
+        renderer = FigureCanvasAgg(figure).get_renderer()
         try:
             families = _families(sheet.family, frozenset(c for text in layout.texts for c in text if c > "~"))
-            layout.draw(_Pen(figure, FigureCanvasAgg(figure).get_renderer(), families))
+            layout.draw(_Pen(figure, renderer, families))
             target = BytesIO()
             figure.savefig(target, format=kind, dpi=figure.dpi, metadata=_metadata(kind, words))
             return target.getvalue()
         finally:
             figure.clear()
+            vars(renderer).clear()  # the library's cycles would hold megabytes of dots until somebody collects them
 
 
 @cache
