@@ -8,7 +8,7 @@ each limit of the effect. Nothing is cut off at 100%: what would pass it is with
 from __future__ import annotations
 
 from collections.abc import Callable
-from typing import Literal
+from typing import TYPE_CHECKING, Literal
 
 import msgspec
 
@@ -17,8 +17,9 @@ from fourcount.appraisal.conversion import converted_figure, mapped
 from fourcount.appraisal.findings import Carriable, Figure, Gap, Interval, Range
 from fourcount.stats.conversion import risk_with
 from fourcount.stats.hazards import over_spans
-from fourcount.stats.overall_risk import starting_risk_from_overall
-from fourcount.stats.propagation import Limits, propagated
+
+if TYPE_CHECKING:
+    from fourcount.stats.propagation import Limits
 
 Value = Callable[[float], float | Gap]
 
@@ -88,6 +89,7 @@ def _ratio_at(one: Carriable, start: float, without: float, spans: float, risk: 
 
 def _from_overall(one: Carriable, overall: float, share: float, spans: float) -> Carried:
     """The starting risk of the unexposed at which all together have the overall risk, solved at each limit."""
+    from fourcount.stats.overall_risk import starting_risk_from_overall  # few start from one
 
     def start(value: float) -> float | Gap:
         return starting_risk_from_overall(one.effect, value, overall, share)
@@ -140,6 +142,8 @@ def _propagated(
     one: Carriable, start: Start, spans: float, bare: Carried, estimate: float, interval: Interval
 ) -> Carried:
     """The bare estimates, with the limits that hold the imprecision of the effect and of the starting risk."""
+    from fourcount.stats.propagation import propagated  # few start from a risk with limits
+
     assert start.limits is not None
     found = propagated(one.effect, estimate, interval, one.level, start.limits, spans)
     without = _without(start, one.level, spans)

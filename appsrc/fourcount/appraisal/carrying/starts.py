@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from dataclasses import dataclass
+from typing import TYPE_CHECKING
 
 from fourcount.appraisal.carrying.spans import Spans
 from fourcount.appraisal.findings import Gap, Interval, Mark
@@ -13,7 +14,9 @@ from fourcount.record.entry.starts import StartReading
 from fourcount.record.outcome import Outcome
 from fourcount.stats.hazards import risk_over
 from fourcount.stats.normal import quantile
-from fourcount.stats.propagation import StartLimits, limits_as_typed, limits_of_counts
+
+if TYPE_CHECKING:
+    from fourcount.stats.propagation import StartLimits
 
 BARE = Gap("bare-starting-risk")
 UNREADABLE = Gap("baseline-unreadable")
@@ -92,6 +95,10 @@ def _usual(reading: RiskReading | Blank | Unreadable, own: float | Gap | None, n
 
 def _typed(reading: RiskReading, rank: Rank) -> Start:
     """A typed risk with the precision that was typed with it: limits before counts."""
+    if reading.low is None and reading.events is None:
+        return Start(value=reading.value, origin="typed", rank=rank)
+    from fourcount.stats.propagation import limits_as_typed, limits_of_counts  # few start from a risk with limits
+
     if reading.low is not None and reading.high is not None:
         limits = limits_as_typed(reading.value, reading.low, reading.high, reading.level)
         if not isinstance(limits, Gap):

@@ -29,9 +29,8 @@ from fourcount.appraisal.findings import (
     Recovered,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import whole
+from fourcount.appraisal.forms.whole import line_of, whole
 from fourcount.appraisal.gating import SUPPORT, withheld_of_effects
-from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import Pace
 from fourcount.appraisal.turning import oriented_effect
 from fourcount.record.entry.starts import read_start
@@ -62,7 +61,7 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     carried = for_a_patient(study, typed)
     p = recovered if isinstance(recovered, Gap) else recovered.p
     figures: dict[str, Figure] = {printed.measure: figure}
-    line, line_marks = own_line(outcome, figures, None, level_of(printed))
+    line, line_marks = line_of(outcome, figures, None, level_of(printed))
     case = Case(
         outcome=outcome,
         form="effect-only",

@@ -14,11 +14,10 @@ from fourcount.appraisal.findings import (
     OutcomeFindings,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import whole
+from fourcount.appraisal.forms.whole import line_of, whole
 from fourcount.appraisal.gating import support_of
 from fourcount.appraisal.losses import losses_of
 from fourcount.appraisal.measures import Table, all_figures, measures, own_test
-from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import NOTHING, Pace, postponed
 from fourcount.appraisal.table import read
 from fourcount.record.entry.starts import read_start
@@ -44,7 +43,7 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     carried = for_a_patient(study, typed)
     shown = measures(figures, support, welcome=outcome.welcome)
     effective = table.effective
-    line, line_marks = own_line(outcome, shown, None if isinstance(effective, Gap) else effective, choices.level)
+    line, line_marks = line_of(outcome, shown, None if isinstance(effective, Gap) else effective, choices.level)
     case = Case(
         outcome=outcome,
         form=form,

@@ -20,10 +20,9 @@ from fourcount.appraisal.findings import (
 )
 from fourcount.appraisal.forms.by_method import ByMethod
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
+from fourcount.appraisal.forms.whole import Measure, given_or_why, line_of, whole
 from fourcount.appraisal.gating import Withheld, withheld_of_pairs
 from fourcount.appraisal.measures import number_needed_from
-from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import NOTHING, PAIRS_NEED_NUMPY, Pace
 from fourcount.appraisal.reach import within_everybody
 from fourcount.record.entry.pairs import read_pairs
@@ -60,7 +59,7 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     measures = {key: _measure(key, figures, withheld, welcome=outcome.welcome) for key in PAIR_MEASURES}
     study = study_of_pairs(outcome, figures, withheld, adjusted, choices.level)
     carried = for_a_patient(study, typed)
-    line, line_marks = own_line(outcome, measures, None, choices.level)
+    line, line_marks = line_of(outcome, measures, None, choices.level)
     case = Case(
         outcome=outcome,
         form="pairs",

@@ -19,9 +19,8 @@ from fourcount.appraisal.findings import (
 )
 from fourcount.appraisal.forms.by_method import ByMethod
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
+from fourcount.appraisal.forms.whole import Measure, given_or_why, line_of, whole
 from fourcount.appraisal.gating import withheld_of_rates
-from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import NOTHING, RATES_NEED_NUMPY, Pace
 from fourcount.record.entry.person_time import read_person_time
 from fourcount.record.entry.readings import GroupRate, PersonTimeReading
@@ -57,7 +56,7 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     measures: dict[str, Measure] = {
         key: Gap(withheld[key]) if key in withheld else given_or_why(figures[key]) for key in RATE_MEASURES
     }
-    line, line_marks = own_line(outcome, measures, None, choices.level)
+    line, line_marks = line_of(outcome, measures, None, choices.level)
     case = Case(
         outcome=outcome,
         form="person-time",

@@ -17,10 +17,9 @@ from fourcount.appraisal.findings import (
     TimedRisks,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
+from fourcount.appraisal.forms.whole import Measure, given_or_why, line_of, whole
 from fourcount.appraisal.gating import SUPPORT, withheld_of_timed
 from fourcount.appraisal.measures import number_needed_from
-from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.postponing import Pace
 from fourcount.record.entry.readings import PrintedRisk, RiskAtTimeReading
 from fourcount.record.entry.risk_at_time import read_risk_at_time
@@ -57,7 +56,7 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     measures: dict[str, Measure] = {}
     for key in TIMED_MEASURES:
         measures[key] = Gap(withheld[key]) if key in withheld else _measure(key, figures, welcome=outcome.welcome)
-    line, line_marks = own_line(outcome, measures, None, reading.level)
+    line, line_marks = line_of(outcome, measures, None, reading.level)
     case = Case(
         outcome=outcome,
         form="risk-at-time",

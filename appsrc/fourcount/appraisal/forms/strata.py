@@ -21,10 +21,9 @@ from fourcount.appraisal.findings import (
     StratumFindings,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import Measure, given_or_why, whole
+from fourcount.appraisal.forms.whole import Measure, given_or_why, line_of, whole
 from fourcount.appraisal.gating import Support, support_of
 from fourcount.appraisal.measures import Table, all_figures, measures, number_needed_from, own_test
-from fourcount.appraisal.own_line import own_line
 from fourcount.appraisal.pooling import cmh, homogeneity, interactions, parting, pooled_figures
 from fourcount.appraisal.postponing import NOTHING, Pace, postponed
 from fourcount.appraisal.reach import within_everybody
@@ -63,7 +62,7 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     study = study_of_strata(outcome, pooled, support, adjusted, choices.level)
     carried = for_a_patient(study, typed)
     shown = _measures(crude, parts, support, outcome)
-    line, line_marks = own_line(outcome, {**shown, **pooled}, None, choices.level)
+    line, line_marks = line_of(outcome, {**shown, **pooled}, None, choices.level)
     case = Case(
         outcome=outcome,
         form="strata",

@@ -6,7 +6,9 @@ from collections.abc import Mapping
 
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.cautions import cautions_for
-from fourcount.appraisal.findings import AnyNumberNeeded, Counts, Figure, Gap, OutcomeFindings, Totals
+from fourcount.appraisal.findings import AnyNumberNeeded, Counts, Figure, Gap, Mark, OutcomeFindings, OwnLine, Totals
+from fourcount.record.outcome import Outcome
+from fourcount.stats.results import FractionalCounts
 
 Measure = Figure | AnyNumberNeeded | Gap
 
@@ -29,6 +31,17 @@ def whole(case: Case, measures: Mapping[str, Measure], totals: Totals | None = N
         carriable=case.carriable,
         line=case.line,
     )
+
+
+def line_of(
+    outcome: Outcome, measures: Mapping[str, Measure], counts: FractionalCounts | None, level: float
+) -> tuple[OwnLine | Gap | None, tuple[Mark, ...]]:
+    """The reader's own line, as ``own_line`` tells it; most tables have none, and start without its tests."""
+    if outcome.line_kind == "none":
+        return None, ()
+    from fourcount.appraisal.own_line import own_line
+
+    return own_line(outcome, measures, counts, level)
 
 
 def given_or_why(figure: Figure) -> Figure | Gap:
