@@ -110,10 +110,19 @@ def test_a_small_array_keeps_its_proportions() -> None:
 
 
 def test_people_stand_in_cells_of_their_shape() -> None:
-    """A cell can be higher than wide; the array grows downwards with it."""
+    """A cell can be higher than wide where there is no room to the side; the array grows downwards with it."""
     flat, tall = lay(GRIDS[100], 160, 26), lay(GRIDS[100], 160, 26, 1.38)
     assert (flat.across, flat.down, tall.across, tall.down) == (15, 15, 15, 21)
     assert (flat.width, flat.height, tall.height) == (158, 158, 218)
+
+
+def test_people_stand_apart_where_there_is_room() -> None:
+    """With room to the side the cells of people widen to squares, and no further; their height stays."""
+    narrow, some, wide = (lay(GRIDS[100], width, 15, 1.38) for width in (160, 200, 600))
+    assert [laid.down for laid in (narrow, some, wide)] == [21, 21, 21]
+    assert [laid.across for laid in (narrow, some, wide)] == [15, 19, 21]
+    assert some.width <= 200
+    assert lay(GRIDS[100], 600, 15).across == 15
 
 
 def test_laid_down_sizes_are_those_of_the_last_icon() -> None:

@@ -59,7 +59,12 @@ def _draw_one_by_one(
         for icon in range(start, stop):
             column, row = laid.grid.place(icon)
             cell = QRectF(corner.x() + laid.x(column), corner.y() + laid.y(row), laid.across, laid.down)
-            draw_icon(painter, cell, state, palette, icons, specks=laid.grid.crowded)
+            draw_icon(painter, cell, state, palette, icons, _icon_width(laid, icons), specks=laid.grid.crowded)
+
+
+def _icon_width(laid: Laid, icons: Icons) -> float:
+    """How wide an icon is, whose cell may be wider."""
+    return min(laid.across, laid.down / TALL[icons]) if not laid.grid.crowded else laid.across
 
 
 def _in_block(laid: Laid, column: int, row: int) -> tuple[float, float]:
@@ -89,7 +94,7 @@ def _tile(state: State, laid: Laid, scale: float, palette: Palette, icons: Icons
     for row in range(last + 1):
         for column in range(last + 1):
             cell = QRectF(laid.x(column), laid.y(row), laid.across, laid.down)
-            draw_icon(painter, cell, state, palette, icons, specks=laid.grid.crowded)
+            draw_icon(painter, cell, state, palette, icons, _icon_width(laid, icons), specks=laid.grid.crowded)
     painter.end()
     return pixmap
 

@@ -56,13 +56,13 @@ def draw_icon(
     In a key, ``stands_for`` is the width of the icons it explains, so that it shows the very shapes that they have.
     ``specks`` are for crowds, in which figures would run into chains, however sharp the screen is.
     """
-    across = pixels_across(painter, cell.width())
-    shown = across if stands_for is None else pixels_across(painter, stands_for)
+    tall = TALL[icons]
+    side = min(cell.width(), cell.height() / tall)
+    across = pixels_across(painter, side)
+    shown = pixels_across(painter, cell.width()) if stands_for is None else pixels_across(painter, stands_for)
     if specks or shown < SHAPES_FROM:
         draw_speck(painter, cell, state, palette, icons)
         return
-    tall = TALL[icons]
-    side = min(cell.width(), cell.height() / tall)
     painter.save()
     painter.translate(cell.center() - QPointF(side / 2, side * tall / 2))
     painter.scale(side, side)

@@ -110,11 +110,16 @@ class Laid:
 
 
 def lay(grid: Grid, width: float, most: float, shape: float = 1.0) -> Laid:
-    """A grid in at most ``width``; a cell is at most ``most`` wide, and ``shape`` times as high as wide."""
+    """A grid in at most ``width``; an icon is at most ``most`` wide, and ``shape`` times as high as wide.
+
+    Where there is room to the side, cells higher than wide widen up to squares, so that an array fills its column.
+    """
     cell = min(width / (grid.columns + LEAST_GAP * grid.gaps_across), most)
     if cell < SNAPPED_FROM:
         cell = min(width / (grid.columns + GAP * grid.gaps_across), most)
         return Laid(grid=grid, across=cell, down=cell * shape, gap=GAP * cell)
     cell = floor(cell)
-    spare = (width - cell * grid.columns) / max(grid.gaps_across, 1)
-    return Laid(grid=grid, across=cell, down=round(cell * shape), gap=floor(min(GAP * cell + 0.5, spare)))
+    down = round(cell * shape)
+    across = max(cell, min(down, floor(width / (grid.columns + GAP * grid.gaps_across))))
+    spare = (width - across * grid.columns) / max(grid.gaps_across, 1)
+    return Laid(grid=grid, across=across, down=down, gap=floor(min(GAP * cell + 0.5, spare)))
