@@ -17,6 +17,7 @@ from importlib import import_module  # noqa: E402, F401
 
 import fourcount.face.grid_forms  # noqa: E402
 import fourcount.ink.palette  # noqa: E402
+import fourcount.picture.plan  # noqa: E402
 import fourcount.record.paper  # noqa: E402
 import fourcount.wording.labels  # noqa: E402
 import fourcount.wording.standing  # noqa: E402, F401
