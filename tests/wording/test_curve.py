@@ -31,7 +31,9 @@ from fourcount.wording.curve import (
     views,
 )
 
-BANNED = re.compile(r"\b(significan\w*|likely|chance|chances|nan|None|inf|should|recommend\w*)\b|[{}]")
+BANNED = re.compile(
+    r"\b(significan\w*|(un)?likely|chances?|rare(ly)?|common|high risk|nan|None|inf|should|recommend\w*)\b|[{}]"
+)
 
 
 def said(outcome: Outcome, view: View | None = None, *, whole: bool = False) -> CurveWords:

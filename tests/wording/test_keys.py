@@ -183,6 +183,14 @@ def test_every_caution_has_a_title_and_a_sentence_with_its_numbers(key):
     assert not re.search(r"[{}…]", text)
 
 
+@pytest.mark.parametrize("key", [rule.key for rule in CAUTIONS])
+@pytest.mark.parametrize("more", [{}, {"beside": "adjusted"}, {"strata": 3}, {"carried": 1}])
+def test_no_caution_recommends(key, more):
+    """It says what a figure rests on, and leaves what to take to the reader."""
+    text = cautions.caution_text(Caution(key=key, facts={**FACTS, **more}))
+    assert not re.search(r"\b(is better|best|prefer\w*|should|recommend\w*|ought)\b", text)
+
+
 @pytest.mark.parametrize("key", [*cautions.TEXTS, "a key of a later version"])
 def test_a_caution_without_its_facts_is_still_a_sentence(key):
     """A hole in the facts never raises."""

@@ -245,7 +245,10 @@ TEXTS = {
     ),
     "crude-carried": (
         "A crude effect carried",
-        "The {effect} carried to {baseline} is the crude one; an adjusted one, where the paper prints it, is better.",
+        (
+            "The {effect} carried to {baseline} is the crude one: it holds whatever else set the groups apart. An "
+            "adjusted one, where the paper prints it, deals with what was measured of that."
+        ),
     ),
     "within-pairs": (
         "An odds ratio of pairs",

@@ -35,8 +35,8 @@ OPEN_BAND = "Where one limit would pass 100%, or fall below 0%, only the other o
 BAR = "The bar on a point is the interval that the patient is told."
 OTHER_SPAN = "Drawn for the study’s own time span: the patient’s figures for another one stand in the window."
 RATIO_TEXT = (
-    "The same {name} is a {ratio} near the {name} itself where the event is rare, and one near 1 where nearly "
-    "everybody has it."
+    "The same {name} is a {ratio} near the {name} itself at starting {risk}s near 0%, and one near 1 at those near "
+    "100%."
 )
 LEFT_OUT = "Not drawn: the {name}, which gives no line."
 NOTHING = "No effect of this table can be carried to another starting risk, so there is nothing to draw."
@@ -237,7 +237,7 @@ def _notes(outcome: Outcome, findings: OutcomeFindings, curve: Curve, view: View
         return (NOTHING,)
     risk, one = names.risk_name(outcome), lines[0 if view.ratios else view.place].effect
     name, ratio = carriable_name(outcome, one), names.effect_name(outcome, "risk_ratio")
-    found = [RATIO_TEXT.format(name=name, ratio=ratio) if view.ratios else KEEPS.format(risk=risk)]
+    found = [RATIO_TEXT.format(name=name, ratio=ratio, risk=risk) if view.ratios else KEEPS.format(risk=risk)]
     if isinstance(one.figure.interval, Gap):
         found.append(NO_BAND.format(name=name))
     else:
