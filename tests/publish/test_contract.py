@@ -183,9 +183,7 @@ def test_a_withheld_limit_stands_in_its_place_alone() -> None:
     """80% v 40% carried to 45%: the upper limit would pass 100%, and all else is given, the number needed too."""
     patient = answer(80, 20, 40, 60, baseline="45%")["patient"]
     assert isinstance(patient, dict)
-    reason = (
-        "The upper limit of the risk would pass 100%, so the interval is open there; carrying the odds ratio avoids it."
-    )
+    reason = "The upper limit of the risk would pass 100%, so the interval is open there."
     gone = {"withheld": "beyond-one", "text": reason}
     assert (patient["risk_with"]["high"], patient["difference"]["high"]) == (gone, gone)
     needed = patient["number_needed"]

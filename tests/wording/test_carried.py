@@ -7,11 +7,12 @@ import pytest
 from carried_patients import carried, effect, findings_with, with_counts
 from forms import at_time, effect_only, of_total, paired, person_time, strata
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.findings import Interval
+from fourcount.appraisal.findings import Gap, Interval
 from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
 from fourcount.wording.basis import basis
+from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.patient import patient_words
 from fourcount.wording.patient_sentence import AS_IN_THE_STUDY, patient_sentence
 from fourcount.wording.patient_table import patient_table
@@ -248,6 +249,12 @@ def test_odds_are_offered_only_where_there_are_any(odds, said):
     words = words_of(outcome, carried("risk_ratio", UP, 0.7), *odds)
     assert words.detail == said
     assert words.with_interval == ""
+
+
+@pytest.mark.parametrize("key", ["beyond-one", "carried-beyond-zero"])
+def test_a_bare_reason_promises_nothing(key):
+    """Where nobody knows what else could be carried, as in JSON, no odds ratio is offered."""
+    assert "odds" not in gap_text(Gap(key)) + limit_text(Gap(key))
 
 
 def test_a_difference_below_nobody_is_withheld():

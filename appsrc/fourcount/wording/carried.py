@@ -19,15 +19,11 @@ from fourcount.wording.headline import choose
 NOT_GIVEN = "not given"
 NO_WIDTH_NEEDED = f"{numbers.INFINITY}{numbers.TO}{numbers.INFINITY}"
 NO_CHANGE = "the same number"
-PASSES_ALL = "The risk would pass 100% here."
-CARRY_THE_ODDS = "The risk would pass 100% here; the odds ratio can be carried instead."
-BELOW_NONE = ("beyond-zero", "carried-beyond-zero")
-FALLS_BELOW_NONE = "The risk would fall below 0% here."
-BELOW_BUT_ODDS = "The risk would fall below 0% here; the odds ratio can be carried instead."
-OPEN_ABOVE = "The upper limit of the risk would pass 100%, so the interval is open there."
-OPEN_ABOVE_BUT_ODDS = f"{OPEN_ABOVE.removesuffix('.')}; carrying the odds ratio avoids it."
-OPEN_BELOW = "The lower limit of the risk would fall below 0%, so the interval is open there."
-OPEN_BELOW_BUT_ODDS = f"{OPEN_BELOW.removesuffix('.')}; carrying the odds ratio avoids it."
+CARRY_THE_ODDS = "the odds ratio can be carried instead"
+ODDS_AVOID_IT = "carrying the odds ratio avoids it"
+PAST_AN_END = ("beyond-one", "carried-beyond-zero")
+"""Why no risk follows from an effect that is carried; odds never get there."""
+
 NEVER_PAST = ("odds_ratio", "hazard_ratio", "rate_ratio")
 """Effects that no starting risk takes past 100%."""
 
@@ -155,11 +151,8 @@ def odds_can_be_carried(findings: OutcomeFindings) -> bool:
 
 def reason(gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
     """Why something is withheld here; where a carried risk ratio passes 100%, odds never do."""
-    if patient.range_from == "table" or gap.key not in ("beyond-one", *BELOW_NONE):
-        return gap_text(gap)
-    if gap.key in BELOW_NONE:
-        return BELOW_BUT_ODDS if _offered(patient, findings) else FALLS_BELOW_NONE
-    return CARRY_THE_ODDS if _offered(patient, findings) else PASSES_ALL
+    gap = _of_the_effect(gap, patient)
+    return _offering(gap_text(gap), CARRY_THE_ODDS, gap, patient, findings)
 
 
 def reasons(patient: PatientFindings, findings: OutcomeFindings) -> tuple[str, ...]:
@@ -174,14 +167,17 @@ def reasons(patient: PatientFindings, findings: OutcomeFindings) -> tuple[str, .
 
 
 def _reason_of_limit(gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
-    if patient.range_from == "table":
-        return limit_text(gap) if gap.key == "beyond-one" else gap_text(gap)
-    if gap.key in BELOW_NONE:
-        return OPEN_BELOW_BUT_ODDS if _offered(patient, findings) else OPEN_BELOW
-    if gap.key == "beyond-one":
-        return OPEN_ABOVE_BUT_ODDS if _offered(patient, findings) else OPEN_ABOVE
-    return limit_text(gap)
+    gap = _of_the_effect(gap, patient)
+    return _offering(limit_text(gap), ODDS_AVOID_IT, gap, patient, findings)
 
 
-def _offered(patient: PatientFindings, findings: OutcomeFindings) -> bool:
-    return patient.effect not in NEVER_PAST and odds_can_be_carried(findings)
+def _of_the_effect(gap: Gap, patient: PatientFindings) -> Gap:
+    """A limit below 0% is that of the effect where one is carried, and no bare formula's."""
+    below = gap.key == "beyond-zero" and patient.range_from != "table"
+    return Gap("carried-beyond-zero") if below else gap
+
+
+def _offering(said: str, offer: str, gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
+    """The reason, with the odds ratio offered where it would help and there is one."""
+    helps = patient.range_from != "table" and gap.key in PAST_AN_END and patient.effect not in NEVER_PAST
+    return f"{said.removesuffix('.')}; {offer}." if helps and odds_can_be_carried(findings) else said

@@ -21,8 +21,8 @@ GAP_TEXTS = {
     "zero-width": "An interval of zero width is withheld; the score family gives a real one.",
     "one-outcome": "Nobody, or everybody, here had the event, where textbook odds have no interval; "
     "the score family gives one.",
-    "beyond-one": "The risk would pass 100% here; where a risk ratio is carried, the odds ratio can be.",
-    "carried-beyond-zero": "The risk would fall below 0% here; where a difference is carried, the odds ratio can be.",
+    "beyond-one": "The risk would pass 100% here.",
+    "carried-beyond-zero": "The risk would fall below 0% here.",
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     "no-discordant-pairs": "All pairs agree, so their odds ratio is not determined: only pairs that differ tell.",
     "concordant-pairs-unknown": "Only the pairs that differ were typed: without those that agree no risk follows.",
@@ -133,12 +133,10 @@ NOT_CARRIED_EFFECTS = {
 """What is said of a printed effect that no patient's risk follows from."""
 
 LIMIT_TEXTS = {
-    "beyond-one": "The upper limit of the risk would pass 100%, so the interval is open there; "
-    "carrying the odds ratio avoids it.",
-    "carried-beyond-zero": "The lower limit of the risk would fall below 0%, so the interval is open there; "
-    "carrying the odds ratio avoids it.",
+    "beyond-one": "The upper limit of the risk would pass 100%, so the interval is open there.",
+    "carried-beyond-zero": "The lower limit of the risk would fall below 0%, so the interval is open there.",
 }
-"""What is said where only a limit is withheld and the estimate stands."""
+"""What is said where only a limit is withheld and the estimate stands; ``carried`` offers odds where there are any."""
 
 UNKNOWN_GAP = "This figure cannot be given."
 
