@@ -96,7 +96,6 @@ LAYOUTS = {"down": "groups down", "across": "groups across"}
 
 FAMILIES = {"score": "score", "textbook": "textbook", "exact": "exact"}
 EFFECTS = {"risk_ratio": "risk ratio", "odds_ratio": "odds ratio"}
-EFFECT_KEPT = "{effect} {value}, kept constant"
 LEVELS = {0.8: "80%", 0.9: "90%", 0.95: "95%", 0.98: "98%", 0.99: "99%", 0.999: "99.9%"}
 INTERVALS_PREFIX = "Intervals: "
 LEVEL_PREFIX = "Level: "

@@ -48,9 +48,6 @@ START_HINTS = {
 }
 USUAL_START = "Usual starting risk"
 
-EFFECT_OPTION = "{effect} {value}, kept constant"
-ADJUSTED_EFFECT = "adjusted {effect}"
-
 PICTURE_NAMES = {"picture": "Picture", "relative": "The relative figure as a picture"}
 
 QUIET = {
