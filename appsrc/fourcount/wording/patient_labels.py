@@ -1,4 +1,4 @@
-"""The words of the third column's rarer fields, the outcomes bar, the picture's forms and a line of the reader's own."""
+"""The words of the third column's rarer fields, the outcomes bar, the picture's forms, a line of the reader's own."""
 
 from __future__ import annotations
 
