@@ -11,7 +11,7 @@ from msgspec.structs import replace
 from fourcount.appraisal.findings import OutcomeFindings, PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
-from fourcount.wording.handout import HandoutWords, file_name, handout_words, why_no_page, with_lead
+from fourcount.wording.handout import HandoutWords, file_name, handout_words, why_no_page
 from fourcount.wording.standing import STANDING_FULL
 from patient_outcomes import AT_TWELVE, HARM, TRIAL
 
@@ -22,11 +22,17 @@ TODAY = date(2026, 12, 1)
 def page(findings_of: Callable[[Outcome], OutcomeFindings]) -> Callable[..., HandoutWords]:
     """The page's words for outcomes drawn on some denominators."""
 
-    def words(*outcomes: Outcome, drawn: tuple[int | None, ...] = (100,), **texts: str) -> HandoutWords:
+    def words(
+        *outcomes: Outcome,
+        drawn: tuple[int | None, ...] = (100,),
+        persons: tuple[bool, ...] = (True,),
+        today: date = TODAY,
+        **texts: str,
+    ) -> HandoutWords:
         record = Record(**texts)
         patients = [findings_of(outcome).patient for outcome in outcomes]
         pages = [(o, p) for o, p in zip(outcomes, patients, strict=True) if isinstance(p, PatientFindings)]
-        return handout_words(record, pages, drawn, ["A sentence."] * len(pages), "9.8.7", TODAY)
+        return handout_words(record, pages, drawn, ["A sentence."] * len(pages), persons, "9.8.7", today)
 
     return words
 
@@ -40,6 +46,24 @@ def test_the_small_print_says_all_that_a_copy_has_to(page: Callable[..., Handout
     assert "Starting risk 12%" in foot
     assert all(sentence in foot for sentence in STANDING_FULL)
     assert words.foot[0] == "Based on one study. Talk it over with your clinician."
+
+
+class Foreign(date):
+    """A day that a machine of another language writes out."""
+
+    def strftime(self, form: str) -> str:
+        return f"Dezember ({form})"
+
+    __format__ = strftime
+
+
+@pytest.mark.parametrize(("month", "name"), [(1, "January"), (3, "March"), (12, "December")])
+def test_the_date_is_english_wherever_the_page_is_made(
+    page: Callable[..., HandoutWords], month: int, name: str
+) -> None:
+    """Months have English names, although a window takes over the machine's language for dates."""
+    foot = " ".join(page(TRIAL, today=Foreign(2026, month, 1)).foot)
+    assert f"Made on 1 {name} 2026 with" in foot
 
 
 def test_a_page_without_a_source_says_so(page: Callable[..., HandoutWords]) -> None:
@@ -83,8 +107,9 @@ def test_the_heading_names_what_is_compared(page: Callable[..., HandoutWords]) -
     ("persons", "said"), [((True, True), "figure is"), ((False,), "mark is"), ((True, False), "figure or mark is")]
 )
 def test_the_lead_says_what_an_icon_is(page: Callable[..., HandoutWords], persons: tuple[bool, ...], said: str) -> None:
-    """Figures are called figures and blocks marks, on the page and in its description."""
-    words = with_lead(page(TRIAL), persons)
+    """Figures are called figures and blocks marks, on the page and in its description; a title stays as typed."""
+    words = page(TRIAL, persons=persons, title_text="Each figure is one person.")
+    assert words.title == "Each figure is one person"
     assert f"Each {said} one person." in words.lead
     assert f"Each {said} one person." in words.description
 

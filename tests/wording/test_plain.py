@@ -15,6 +15,8 @@ from fourcount.wording.plain import negated, plain_hint, present
 from fourcount.wording.plain_outcome import PlainWords, plain_risks, plain_words, why_not
 from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, SHOWN, SMALL, TRIAL, WELCOME
 
+UNWORDED = replace(TRIAL, left_words_text="", right_words_text="", left_heading_text="", right_heading_text="")
+
 FindingsOf = Callable[[Outcome], OutcomeFindings]
 
 
@@ -54,6 +56,63 @@ def test_the_past_is_said_in_the_present(typed: str, said: str) -> None:
 
 
 @pytest.mark.parametrize(
+    "typed",
+    [
+        "lost to follow-up",
+        "left leg ulcer",
+        "left ventricular failure",
+        "used to smoke",
+        "missed miscarriage",
+        "fractured neck of femur",
+        "relapsed disease",
+        "healed ulcer",
+        "worsened pain",
+    ],
+)
+def test_what_only_looks_like_a_verb_stays_as_typed(typed: str) -> None:
+    """Words of the table that are no verb of these people in this phrase are left alone."""
+    assert present(typed) == typed
+
+
+@pytest.mark.parametrize(
+    ("typed", "said"),
+    [
+        ("lost weight", "lose weight"),
+        ("left the trial", "leave the trial"),
+        ("used a stick", "use a stick"),
+        ("missed an appointment", "miss an appointment"),
+        ("fractured a hip", "fracture a hip"),
+        ("relapsed within a year", "relapse within a year"),
+        ("healed completely", "heal completely"),
+        ("survived 5 years", "survive 5 years"),
+    ],
+)
+def test_the_same_words_as_verbs_are_turned(typed: str, said: str) -> None:
+    """Where what follows shows a verb it is put into the present."""
+    assert present(typed) == said
+
+
+@pytest.mark.parametrize(
+    ("left", "right", "event", "other"),
+    [
+        ("fell", "", "fall", "do not"),
+        ("Died", "Survived", "die", "survive"),
+        ("Died, n (%)", "", "die", "do not"),
+        ("healed", "", "heal", "do not"),
+        ("", "Survived", "do not survive", "survive"),
+        ("Falls", "", "have falls", "do not"),
+        ("Stroke", "", "have the event “Stroke”", "do not"),
+    ],
+)
+def test_a_heading_alone_is_said_as_a_verb(
+    left: str, right: str, event: str, other: str, say: Callable[..., PlainWords]
+) -> None:
+    """The most usual entry, headings and no words, gives plain words where the table knows the verb."""
+    words = say(replace(UNWORDED, left_heading_text=left, right_heading_text=right))
+    assert (words.event, words.other) == (event, other)
+
+
+@pytest.mark.parametrize(
     ("said", "lack"),
     [
         ("fall at least once", "do not fall at least once"),
@@ -78,9 +137,9 @@ def test_words_typed_for_patients_go_first(say: Callable[..., PlainWords]) -> No
 
 
 def test_a_column_without_a_name_is_said_by_the_other_one() -> None:
-    """The hint of an unnamed column is the lack of the named one."""
+    """The hint of an unnamed column is the lack of the named one, in the fewest words beside it."""
     bare = replace(TRIAL, right_words_text="", right_heading_text="", left_heading_text="")
-    assert plain_hint(bare, "right") == "do not fall at least once"
+    assert plain_hint(bare, "right") == "do not"
     assert plain_hint(bare, "left") == "fall at least once"
 
 
@@ -88,9 +147,7 @@ def test_person_time_has_words_for_the_others_too() -> None:
     """Its table has events alone; the others are said as typed, else as the lack of the event."""
     rates = replace(TRIAL, table=PersonTime(unit_text="person-years"))
     assert plain_hint(rates, "right") == "do not fall"
-    assert (
-        plain_hint(replace(rates, right_words_text="", right_heading_text=""), "right") == "do not fall at least once"
-    )
+    assert plain_hint(replace(rates, right_words_text="", right_heading_text=""), "right") == "do not"
 
 
 def test_the_page_says_first_both_risks_then_the_difference(say: Callable[..., PlainWords]) -> None:

@@ -52,6 +52,9 @@ FOR_ANY = (
 )
 """From the best to read to what can just be read: the last has text of 8 points."""
 
+LONGEST_LEAD = (True, False)
+"""People drawn as figures and as marks: the words for that are the longest that a page can need."""
+
 LARGEST_ARRAY = 520
 FOOT_SIZE = 11
 BLOCK_GAP = 12
@@ -140,13 +143,12 @@ def _composed(record: Record, named: Sequence[Named], paper: Paper, version: str
     for denominator in dict.fromkeys((common, None)):
         pages = [shown(outcome, findings, USUAL, denominator) for outcome, findings in named]
         ready = [_as_marks(it) for it in pages if it]
-        page = _words(record, named, ready, version, today)
         blocks = [Block(it) for it in ready]
-        fit = _fitted(page, blocks, paper)
+        fit = _fitted(_words(record, named, ready, LONGEST_LEAD, version, today), blocks, paper)
         if fit is not None:
             wide = (paper.width - 2 * MARGIN) * PER_MM
             persons = [block.has_persons(fit.style, fit.setting, wide, fit.array) for block in blocks]
-            return Handout(words.with_lead(page, persons), blocks, paper, fit)
+            return Handout(_words(record, named, ready, persons, version, today), blocks, paper, fit)
     return None
 
 
@@ -155,13 +157,16 @@ def _as_marks(it: Shown) -> Shown:
     return it if it.plan.denominator == 100 else it._replace(options=it.options._replace(icons="block"))
 
 
-def _words(record: Record, named: Sequence[Named], ready: Sequence[Shown], version: str, today: date) -> HandoutWords:
+def _words(
+    record: Record, named: Sequence[Named], ready: Sequence[Shown], persons: Sequence[bool], version: str, today: date
+) -> HandoutWords:
     patients = [(outcome, findings.patient) for outcome, findings in named]
     return words.handout_words(
         record,
         [(outcome, patient) for outcome, patient in patients if not isinstance(patient, Gap)],
         [it.plan.denominator for it in ready],
         [it.words.sentence for it in ready],
+        persons,
         version,
         today,
     )

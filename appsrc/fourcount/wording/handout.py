@@ -30,6 +30,12 @@ NOTHING_READY = "No outcome has all that a page needs yet. {why}"
 TOO_MANY = "{fit} of these {count} outcomes fit on one page: untick {rest}."
 TOO_LONG = "These names are too long for one page: shorten those of the groups and of the outcome."
 
+MONTHS = (
+    "January", "February", "March", "April", "May", "June",
+    "July", "August", "September", "October", "November", "December",
+)  # fmt: skip
+"""The page is English wherever it is made: a window takes over the machine's language for dates."""
+
 USUAL_NAME = "handout"
 LONGEST_NAME = 80
 
@@ -49,27 +55,24 @@ def handout_words(
     pages: Sequence[tuple[Outcome, PatientFindings]],
     denominators: Sequence[int | None],
     sentences: Sequence[str],
+    persons: Sequence[bool],
     version: str,
     today: date,
 ) -> HandoutWords:
-    """``denominators`` and ``sentences`` are those of the outcomes on the page; this room has no clock."""
+    """``denominators``, ``sentences`` and ``persons`` are those of the outcomes on the page; this room has no clock.
+
+    ``persons`` says of each whether its people are drawn as figures, and not as marks.
+    """
     title = names.bare(record.title_text)
     heading = _heading([subject(outcome) for outcome, _ in pages], title)
-    lead = " ".join(part for part in (EACH_FIGURE, _metric(denominators)) if part)
+    each = EACH_FIGURE if all(persons) else EACH_FIGURE_OR_MARK if any(persons) else EACH_MARK
+    lead = " ".join(part for part in (each, _metric(denominators)) if part)
     return HandoutWords(
         title=title or heading,
         heading=heading,
         lead=lead,
         foot=(ONE_STUDY, _basis(pages, record.choices), _source(record), *_made(version, today)),
         description=" ".join((heading, lead, *sentences)),
-    )
-
-
-def with_lead(words: HandoutWords, persons: Sequence[bool]) -> HandoutWords:
-    """The words with what an icon stands for, by which outcomes are drawn as persons and which as marks."""
-    each = EACH_FIGURE if all(persons) else EACH_MARK if not any(persons) else EACH_FIGURE_OR_MARK
-    return words._replace(
-        lead=words.lead.replace(EACH_FIGURE, each), description=words.description.replace(EACH_FIGURE, each)
     )
 
 
@@ -117,7 +120,8 @@ def _source(record: Record) -> str:
 
 
 def _made(version: str, today: date) -> tuple[str, ...]:
-    return (MADE.format(date=f"{today.day} {today:%B} {today.year}", version=version), " ".join(STANDING_FULL))
+    day = f"{today.day} {MONTHS[today.month - 1]} {today.year}"
+    return (MADE.format(date=day, version=version), " ".join(STANDING_FULL))
 
 
 def why_no_page(lines: Sequence[str]) -> str:

@@ -11,7 +11,7 @@ import re
 
 from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import Column, Outcome, PersonTime
-from fourcount.wording import names
+from fourcount.wording import event_names, names
 
 PRESENT = {
     "became": "become", "bled": "bleed", "broke": "break", "carried": "carry", "caught": "catch", "coughed": "cough",
@@ -27,6 +27,20 @@ PRESENT = {
 }  # fmt: skip
 """Verbs that studies count people by, and what is said of people now."""
 
+ALONE = (
+    r"$|\w+ly\b|\d|(?:after|again|and|as|at|because|before|by|despite|during|for|from|in|on|once|or|over|since|soon"
+    r"|sooner|to|twice|under|until|while|with|within|without)\b"
+)
+SOMETHING = r"(?:an?|any|at|both|more|no|one|some|the|their|two)\b|\d"
+VERB_BEFORE = {
+    **dict.fromkeys(("bled", "fainted", "healed", "relapsed", "survived", "worsened"), ALONE),
+    **dict.fromkeys(("broke", "fractured", "missed"), SOMETHING),
+    "left": r"(?:care|early|home|hospital|school|the|their|work)\b",
+    "lost": r"(?!to\b)",
+    "used": r"(?!to\b)",
+}
+"""What follows these words where they are verbs: "left the trial", not "left leg ulcer" nor "lost to follow-up"."""
+
 BASES = frozenset(word for word in PRESENT.values() if word != "are")
 DID_NOT = re.compile(r"^(?:did not|didn['’]t)\b(?P<rest>.*)$", re.IGNORECASE | re.DOTALL)
 STAYS_AFTER_HAD = re.compile(r"^(?:been|not|never|already|gone|done|\w+(?:ed|en))\b", re.IGNORECASE)
@@ -38,17 +52,22 @@ PAST = re.compile(r"^\w+ed$", re.IGNORECASE)
 
 def present(words: str) -> str:
     """The phrase as it is said of people now; one that the table does not hold stays as typed."""
+    return _turned(words) or words
+
+
+def _turned(words: str) -> str | None:
+    """The phrase in the present; None where the table does not hold all of its verbs."""
     if match := DID_NOT.match(words):
         return f"do not{match['rest']}"
     parts = JOINED.split(words)
     first = _verb(parts[0])
     if first is None:
-        return words
+        return None
     turned = [first]
     for joint, part in zip(parts[1::2], parts[2::2], strict=True):
         said = _verb(part)
         if said is None and PAST.match(part.split(" ", 1)[0]):
-            return words  # a past that is not in the table: readers get one tense, the one typed
+            return None  # a past that is not in the table: readers get one tense, the one typed
         turned += [joint, said or part]
     return "".join(turned)
 
@@ -56,8 +75,11 @@ def present(words: str) -> str:
 def _verb(part: str) -> str | None:
     """One part of a phrase with its leading verb in the present; None where the table does not hold it."""
     verb, _, rest = part.partition(" ")
-    now = PRESENT.get(verb.lower())
-    if now is None or (verb.lower() == "had" and STAYS_AFTER_HAD.match(rest)):
+    verb = verb.lower()
+    now = PRESENT.get(verb)
+    if now is None or (verb == "had" and STAYS_AFTER_HAD.match(rest)):
+        return None
+    if verb in VERB_BEFORE and not re.match(VERB_BEFORE[verb], rest, re.IGNORECASE):
         return None
     return f"{now} {rest}".rstrip()
 
@@ -75,23 +97,63 @@ def negated(said: str) -> str:
     return f"do not {said}" if said.split(" ", 1)[0] in BASES else ""
 
 
+NEGATIVE = re.compile(
+    r"^(?:(?:do|did|are|were|was|have|had|can|could) (?:not|no|never)|never|not)\b|^\w+n['’]t\b", re.IGNORECASE
+)
+
+
+def is_negative(said: str) -> bool:
+    """Whether a phrase says what people lack, so that fewer of it would be a double negative."""
+    return NEGATIVE.match(said) is not None
+
+
 def plain_hint(outcome: Outcome, column: Column) -> str:
     """What is said of people of this column where the reader types nothing plainer; "" where it has no name."""
-    if column == "right" and isinstance(outcome.table, PersonTime):  # which has events and no other column
-        typed = outcome.right_words_text.strip() or outcome.right_heading_text.strip()
-        return present(names.other_words(outcome)) if typed else negated(plain_hint(outcome, "left"))
-    viewed = outcome if outcome.counts_left == (column == "left") else count_other_outcome(outcome)
-    if viewed.event_words_text.strip() or viewed.event_heading_text.strip():
-        return present(names.event_words(viewed))
-    if viewed.other_words_text.strip() or viewed.other_heading_text.strip():
-        return negated(present(names.other_words(viewed)))
-    return ""
+    hint = _hint(outcome, column)
+    return hint if column == unwelcome_column(outcome) else _short(hint, plain_said(outcome, _beside(column)))
 
 
 def plain_said(outcome: Outcome, column: Column) -> str:
     """What is said of people of this column: in the reader's plain words, else in the present; "" if unknown."""
-    typed = outcome.plain_event_text if column == "left" else outcome.plain_other_text
-    return names.bare(typed) or plain_hint(outcome, column)
+    said = _typed(outcome, column) or _hint(outcome, column)
+    if column == unwelcome_column(outcome):
+        return said
+    return _short(said, plain_said(outcome, _beside(column)))
+
+
+def _hint(outcome: Outcome, column: Column) -> str:
+    """A column's name in the present, else the lack of the other one's."""
+    if column == "right" and isinstance(outcome.table, PersonTime):  # which has events and no other column
+        typed = outcome.right_words_text.strip() or outcome.right_heading_text.strip()
+        return present(names.other_words(outcome)) if typed else negated(_hint(outcome, "left"))
+    viewed = outcome if outcome.counts_left == (column == "left") else count_other_outcome(outcome)
+    if viewed.event_words_text.strip() or viewed.event_heading_text.strip():
+        return _named(viewed)
+    if viewed.other_words_text.strip() or viewed.other_heading_text.strip():
+        return negated(_named(count_other_outcome(viewed)))
+    return ""
+
+
+def _named(outcome: Outcome) -> str:
+    """The counted column in the present; a heading alone that is a verb is said as one, and not as a name."""
+    heading = event_names.without_unit(names.bare(outcome.event_heading_text))
+    said = None if outcome.event_words_text.strip() else _turned(heading)
+    return said or present(names.event_words(outcome))
+
+
+def _short(other: str, event: str) -> str:
+    """The other frame without saying the event again: "do not", "are not"."""
+    if other and other == negated(event) and is_negative(other):
+        return " ".join(other.split(" ", 2)[:2])
+    return other
+
+
+def _typed(outcome: Outcome, column: Column) -> str:
+    return names.bare(outcome.plain_event_text if column == "left" else outcome.plain_other_text)
+
+
+def _beside(column: Column) -> Column:
+    return "right" if column == "left" else "left"
 
 
 def unwelcome_column(outcome: Outcome) -> Column:
