@@ -52,6 +52,7 @@ PATIENT_KEYS = (
     "range_from",
     "start_from",
     "start_interval",
+    "start_level",
     "risk_without_interval",
     "measure",
     "carried",

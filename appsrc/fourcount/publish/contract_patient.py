@@ -36,6 +36,7 @@ def patient_json(patient: PatientFindings | Gap) -> Json:
         "range_from": patient.range_from,
         "start_from": patient.start_from,
         "start_interval": pair_json(patient.start_interval),
+        "start_level": patient.start_level,
         "risk_without_interval": _whole_interval(patient),
         "measure": patient.measure,
         "carried": figure_json(patient.carried),

@@ -120,6 +120,7 @@ GAP_TEXTS = {
     "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
     "undetermined-at-baseline": "An infinite effect says nothing at a starting risk of 0%, nor an odds ratio of 0 "
     "at one of 100%.",
+    "other-level": "The study’s interval of this risk has another level than the effect that is carried.",
     "bare-starting-risk": "The starting risk was typed without an interval of its own.",
     "line-unreadable": "Your line cannot be read; 2 per 100 would do for a difference, 1.25 for a ratio.",
     "line-scale-not-here": "There is no such measure here to draw your line on; choose another scale for it.",

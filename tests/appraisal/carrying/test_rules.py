@@ -11,6 +11,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Figure, Gap, Interval, PatientFindings, Range
 from fourcount.record.outcome import Outcome, Patient
 from fourcount.record.paper import Choices
+from fourcount.stats.normal import quantile
 from fourcount.stats.propagation import limits_as_typed, limits_of_counts, propagated
 
 
@@ -75,6 +76,43 @@ def test_wilsons_limits_of_a_counted_starting_risk():
     assert (round(low, 4), round(high, 4)) == (0.0820, 0.1723)
 
 
+@pytest.mark.parametrize("span", ["", "5 years"])
+@pytest.mark.parametrize(
+    ("outcome", "level"),
+    [(of_total(), 0.95), (of_total(), 0.9), (effect_only("hazard_ratio", "0.72 (90% CI 0.6 to 0.9)"), 0.9)],
+)
+def test_every_interval_under_one_head_has_its_level(outcome, level, span):
+    """Limits of 12% typed at 99% are told as typed, with their level; all figures have the level of the effect's."""
+    typed = {"starting_risk_text": "12% (99% CI 9 to 15)", "other_span_text": span}
+    patient = patient_of(outcome, 0.9 if level == 0.9 else 0.95, **typed)
+    start = limits_as_typed(0.12, 0.09, 0.15, 0.99)
+    both = propagated(
+        patient.effect, patient.carried.estimate, patient.carried.interval, level, start, 5 if span else 1
+    )
+    assert (patient.level, patient.start_level) == (level, 0.99)
+    assert Interval(low=0.09, high=0.15) == patient.start_interval
+    for figure, limits in (
+        (patient.without, both.without), (patient.with_, both.with_),
+        (patient.difference, both.difference), (patient.risk_ratio, both.risk_ratio),
+    ):  # fmt: skip
+        assert (figure.interval.low, figure.interval.high) == (limits.low, limits.high)
+
+
+def test_an_effect_without_limits_leaves_the_start_at_the_level_of_the_head():
+    """A bare ratio at 12% (99% interval 9 to 15): the head says 95%, and so do the limits of the risk."""
+    patient = patient_of(effect_only("risk_ratio", "0.72"), starting_risk_text="12% (99% CI 9 to 15)")
+    start = limits_as_typed(0.12, 0.09, 0.15, 0.99)
+    assert ends(patient.without) == (start.at(-quantile(0.95)), 0.12, start.at(quantile(0.95)))
+
+
+def test_the_studys_own_risk_has_no_interval_of_another_level():
+    """An adjusted effect printed at 90% beside a table at 95%: the table's interval of its risk stays in the table."""
+    outcome = of_total(design="cohort", adjusted_text="OR 0.45 (90% CI 0.30 to 0.70)")
+    patient = patient_of(outcome)
+    assert (patient.level, patient.start_level, patient.without.interval) == (0.9, 0.95, Gap("other-level"))
+    assert isinstance(patient_of(outcome, 0.9).without.interval, Interval)
+
+
 def test_typed_limits_keep_their_own_level():
     """A starting risk of 12% (90% interval 9 to 15) is as precise as these limits say at 90%."""
     patient = patient_of(of_total(), starting_risk_text="12% (90% CI 9-15)")
@@ -83,7 +121,8 @@ def test_typed_limits_keep_their_own_level():
     both = propagated("risk_ratio", patient.carried.estimate, patient.carried.interval, 0.95, start)
     assert not isinstance(both, Gap)
     assert ends(patient.difference)[::2] == (both.difference.low, both.difference.high)
-    assert Interval(low=0.09, high=0.15) == patient.start_interval == patient.without.interval
+    assert Interval(low=0.09, high=0.15) == patient.start_interval
+    assert ends(patient.without)[::2] == (both.without.low, both.without.high)
 
 
 def test_a_propagated_range_is_wider_than_that_of_a_bare_value():

@@ -153,6 +153,7 @@ def _propagated(
             without=without,
             with_=_with_interval(bare.with_, found),
             difference=_with_interval(bare.difference, found),
+            risk_ratio=_with_interval(bare.risk_ratio, found),
             range_from="both",
         )
 
@@ -161,7 +162,7 @@ def _propagated(
 
     return Carried(
         baseline=bare.baseline,
-        without=without,
+        without=_with_interval(without, _interval(found.without.low, found.without.high, None)),
         with_=limited(bare.with_, found.with_),
         difference=limited(bare.difference, found.difference),
         risk_ratio=limited(bare.risk_ratio, found.risk_ratio),
@@ -170,8 +171,8 @@ def _propagated(
 
 
 def _without(start: Start, level: float, spans: float) -> Figure:
-    """The starting risk with its own limits: typed ones as they are, at their own level."""
-    own = start.interval(level)
+    """The starting risk with its own limits at the level of the effect's, whatever the level of typed ones."""
+    own = start.own_limits(level)
     interval = own if isinstance(own, Gap) else Interval(low=_over(own.low, spans), high=_over(own.high, spans))
     method = "typed" if start.typed is not None else "wilson"
     return Figure(estimate=_over(start.value, spans), interval=interval, method=method)

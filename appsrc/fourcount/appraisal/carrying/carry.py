@@ -9,7 +9,7 @@ import msgspec
 from fourcount.appraisal.carrying.at_a_start import carried_to
 from fourcount.appraisal.carrying.direct import at_span, direct, over_another_span
 from fourcount.appraisal.carrying.effects import chosen
-from fourcount.appraisal.carrying.spans import Spans, mark_of_span, spans_of
+from fourcount.appraisal.carrying.spans import ALIKE, Spans, mark_of_span, spans_of
 from fourcount.appraisal.carrying.starts import BARE, Start, Starts, starts_of
 from fourcount.appraisal.carrying.study import OwnRisks, Study
 from fourcount.appraisal.findings import (
@@ -97,6 +97,7 @@ def _by_the_table(study: Study, own: OwnRisks, one: Carriable, start: Start, spa
         measure=one.measure,
         start_from="reference",
         start_interval=_whole(own.reference),
+        start_level=own.level if isinstance(own.reference.interval, Interval) else None,
         study_span=spans.study,
         other_span=spans.other,
         rank=start.rank,
@@ -110,13 +111,14 @@ def _by_the_effect(study: Study, one: Carriable, start: Start, spans: Spans) -> 
     found = carried_to(one, start, spans.ratio)
     if isinstance(found.baseline, Gap):
         return found.baseline
-    own = study.own.reference if study.own is not None and start.origin == "reference" else None
+    own = study.own if start.origin == "reference" else None
+    given, given_level = start.given(one.level) if own is None else (_whole(own.reference), own.level)
     return PatientFindings(
         baseline=found.baseline,
         baseline_from="given" if own is None else "reference",
         effect=one.effect,
         carried=one.figure,
-        without=found.without if own is None else at_span(risk_within_reach(own), spans.ratio),
+        without=found.without if own is None else _own_start(own, one.level, spans),
         with_=found.with_,
         difference=found.difference,
         number_needed=_number_needed(study, found.difference),
@@ -126,12 +128,20 @@ def _by_the_effect(study: Study, one: Carriable, start: Start, spans: Spans) -> 
         adjusted=one.adjusted,
         adjusted_for=one.adjusted_for,
         start_from=start.origin,
-        start_interval=start.interval(one.level) if own is None else _whole(own),
+        start_interval=given,
+        start_level=None if isinstance(given, Gap) else given_level,
         study_span=spans.study,
         other_span=spans.other,
         rank=start.rank,
         level=one.level,
     )
+
+
+def _own_start(own: OwnRisks, level: float, spans: Spans) -> Figure:
+    """The study's own starting risk beside an effect; its interval only where that has the level of the effect's."""
+    risk = at_span(risk_within_reach(own.reference), spans.ratio)
+    alike = abs(own.level - level) < ALIKE or isinstance(risk.interval, Gap)
+    return risk if alike else Figure(estimate=risk.estimate, interval=Gap("other-level"), method=risk.method)
 
 
 def _whole(own: Figure) -> Interval | Gap:

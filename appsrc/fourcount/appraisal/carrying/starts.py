@@ -26,7 +26,8 @@ UNREADABLE = Gap("baseline-unreadable")
 class Start:
     """A starting risk over the study's time span.
 
-    ``limits`` tells how precise it is, where it has limits of its own. With ``share`` the value is the risk of all
+    ``limits`` tells how precise it is, where it has limits of its own; ``typed`` are those that were typed, at
+    ``typed_level``. With ``share`` the value is the risk of all
     people, of whom that share has the exposure: the starting risk then depends on the effect.
     """
 
@@ -35,12 +36,20 @@ class Start:
     rank: Rank = ""
     limits: StartLimits | None = None
     typed: Interval | None = None
+    typed_level: float | None = None
     share: float | None = None
 
-    def interval(self, level: float) -> Interval | Gap:
-        """Its own limits as typed; of counts, Wilson's at the level of the effect's."""
-        if self.typed is not None or self.limits is None:
-            return self.typed or BARE
+    def given(self, level: float) -> tuple[Interval | Gap, float | None]:
+        """Its limits and their level, as they are told: as typed; of counts, Wilson's at a level."""
+        if self.typed is not None:
+            return self.typed, self.typed_level
+        own = self.own_limits(level)
+        return own, None if isinstance(own, Gap) else level
+
+    def own_limits(self, level: float) -> Interval | Gap:
+        """Its own limits at a level; those of another level go there along Wilson's scale."""
+        if self.limits is None:
+            return BARE
         z = quantile(level)
         return Interval(low=self.limits.at(-z), high=self.limits.at(z))
 
@@ -103,7 +112,14 @@ def _typed(reading: RiskReading, rank: Rank) -> Start:
         limits = limits_as_typed(reading.value, reading.low, reading.high, reading.level)
         if not isinstance(limits, Gap):
             typed = Interval(low=reading.low, high=reading.high)
-            return Start(value=reading.value, origin="typed", rank=rank, limits=limits, typed=typed)
+            return Start(
+                value=reading.value,
+                origin="typed",
+                rank=rank,
+                limits=limits,
+                typed=typed,
+                typed_level=reading.level,
+            )
     elif reading.events is not None and reading.total is not None:
         limits = limits_of_counts(reading.events, reading.total)
         if not isinstance(limits, Gap):

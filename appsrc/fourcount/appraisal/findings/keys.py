@@ -91,6 +91,7 @@ GAP_KEYS = (
     "other-span-pairs",  # of the same people, no interval follows from those of two risks
     "baseline-unreadable",  # the typed starting risk gives no risk
     "carried-gap",  # the effect to carry has no value
+    "other-level",  # the study's own starting risk has an interval of another level than the effect carried to it
     "bare-starting-risk",  # the starting risk is a bare value without an interval of its own
     "line-unreadable",  # the reader's own line cannot be read
     "line-scale-not-here",  # this form has no measure on the scale of the reader's own line

@@ -31,9 +31,9 @@ class Carriable(msgspec.Struct, frozen=True, kw_only=True):
     """One effect that this outcome can carry to a patient.
 
     ``effect`` is the kind of measure, ``measure`` the key under which its figure stands ("pooled_risk_ratio",
-    "pair_odds_ratio", "hazard_ratio"). ``adjusted`` says that it is the adjusted effect that the paper prints beside
-    its counts. ``adjusted_for`` is what for, as typed. ``level`` is that of the figure's interval, as a fraction: a
-    printed one keeps its own.
+    "pair_odds_ratio", "hazard_ratio"). ``adjusted`` says that it is an adjusted effect that the paper prints, beside
+    its counts or without any. ``adjusted_for`` is what for, as typed. ``level`` is that of the figure's interval, as a
+    fraction: a printed one keeps its own.
     """
 
     effect: CarriedEffect
@@ -54,11 +54,12 @@ class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
     is the relative figure at this starting risk, whatever effect was carried. A figure from the effect names the
     effect's method.
 
-    ``start_from`` says where the starting risk comes from, ``start_interval`` its own limits. ``study_span`` and
+    ``start_from`` says where the starting risk comes from, ``start_interval`` its own limits as they were typed, or
+    those of its counts, at ``start_level`` (None without limits). ``study_span`` and
     ``other_span`` are the study's time span and the one carried to, where another was asked for; ``baseline`` is the
     starting risk over the study's. ``rank`` is "low", "usual" or "high" of three starting risks; the usual one's
     findings hold those of the low and the high one, a Gap where one cannot be given. ``level`` is that of all
-    intervals here but typed limits of the starting risk.
+    other intervals here, that of ``without`` among them.
     """
 
     baseline: float
@@ -76,6 +77,7 @@ class PatientFindings(msgspec.Struct, frozen=True, kw_only=True):
     adjusted_for: str = ""
     start_from: StartFrom = "reference"
     start_interval: Interval | Gap = Gap("bare-starting-risk")
+    start_level: float | None = None
     study_span: Duration | None = None
     other_span: Duration | None = None
     rank: Rank = ""
@@ -103,4 +105,4 @@ class OwnLine(msgspec.Struct, frozen=True, kw_only=True):
     worse_side: bool
     p: float | Gap | None = None
     method: str = ""
-    level: float = 0.95
+    level: float = USUAL_LEVEL
