@@ -15,7 +15,6 @@ from fourcount.picture.plan import (
     STATES,
     Array,
     State,
-    bars_are_easier,
     half_up,
     plan,
     plan_on,
@@ -282,12 +281,3 @@ def test_nothing_is_explained_of_what_is_too_small_to_draw(without: Fraction, wi
     """Where no denominator can be taken there is no icon, and so no key, in any arrangement."""
     result = plan(float(without), float(with_))
     assert bool(states_drawn(result, how)) == (result.denominator is not None and how != "bars")  # type: ignore[arg-type]
-
-
-@pytest.mark.parametrize(
-    ("without", "with_", "easier"),
-    [(0.024, 0.026, False), (0.004, 0.3, True), (0.3, 0.004, True), (0.12, 0.06, False), (0.00001, 0.00002, True)],
-)
-def test_bars_are_suggested_for_many_of_a_thousand(without: float, with_: float, easier: bool) -> None:
-    """From 100 of 1,000 on bars are read with fewer errors (McCaffery and others 2012), and where nothing is drawn."""
-    assert bars_are_easier(plan(without, with_)) == easier

@@ -11,7 +11,8 @@ from fourcount.appraisal.findings import Gap, Interval
 from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
-from fourcount.wording.basis import basis
+from fourcount.wording import starts
+from fourcount.wording.basis import basis, range_note
 from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.patient import patient_words
 from fourcount.wording.patient_sentence import AS_IN_THE_STUDY, patient_sentence
@@ -170,18 +171,16 @@ def test_one_sentence_says_what_everything_rests_on(outcome, patient, said):
 )
 def test_what_the_interval_holds_is_said(outcome, patient, note):
     """Of both, of the effect alone, or with something taken as certain."""
-    words = words_of(outcome, patient)
-    assert words.range_note == note
-    assert words.detail.endswith(note)
+    assert range_note(outcome, patient) == note
+    assert words_of(outcome, patient).detail.endswith(note)
     assert note in patient_sentence(outcome, findings_with(outcome, patient), Choices())
 
 
 def test_the_studys_own_interval_is_not_talked_about():
     """It has a name, which stays out of the column."""
     patient = carried("risk_ratio", RR, 0.171, range_from="table", **AT_OWN)
-    words = words_of(of_total(), patient)
-    assert words.range_note == "The interval is the study’s own."
-    assert words.range_note not in words.detail
+    assert range_note(of_total(), patient) == "The interval is the study’s own."
+    assert "own" not in words_of(of_total(), patient).detail
     assert patient_sentence(of_total(), findings_with(of_total(), patient), Choices()) == AS_IN_THE_STUDY
 
 
@@ -205,15 +204,17 @@ def test_another_span_is_the_span_of_every_sentence():
 
 
 @pytest.mark.parametrize(
-    ("patient", "who"),
+    ("patient", "like"),
     [
-        (carried("risk_ratio", RR, 0.12), "people who start at a risk of 12 in 100"),
-        (carried("risk_ratio", RR, 0.171, **AT_OWN), "people like those in the study"),
+        (carried("risk_ratio", RR, 0.12), False),
+        (carried("risk_ratio", RR, 0.171, **AT_OWN), True),
+        (carried("odds_ratio", OR, 0.171, adjusted=True, **AT_OWN), True),
+        (carried("risk_ratio", RR, 0.171, study_span=YEAR, other_span=FIVE_YEARS, **AT_OWN), False),
     ],
 )
-def test_the_people_are_those_at_this_starting_risk(patient, who):
-    """Only at the study's own risk are they like those in the study."""
-    assert words_of(of_total(), patient).who == who
+def test_people_are_like_the_studys_at_its_own_risk_alone(patient, like):
+    """By whatever effect, within the study's own time."""
+    assert starts.like_the_study(patient) == like
 
 
 def test_the_adjusted_effect_beside_counts_keeps_its_level():
@@ -273,7 +274,7 @@ def test_of_nobody_there_is_no_interval_and_no_relative_figure(kind):
     words = words_of(outcome, carried(kind, RR, 0.0, risk_ratio=RR))
     assert words.detail == "NNT at this starting risk ∞."
     assert (words.summary, words.with_interval) == ("over 12 months", "")
-    (row,) = patient_table(outcome, findings_with(outcome, carried(kind, RR, 0.0, risk_ratio=RR)), Choices())
+    (row,) = patient_table(findings_with(outcome, carried(kind, RR, 0.0, risk_ratio=RR)), Choices())
     assert row == ("0%", "0", "0", "the same number", "NNT ∞")
 
 
@@ -284,7 +285,7 @@ def test_no_effect_is_the_same_number():
     words = words_of(outcome, patient)
     assert words.summary_bold == "The same number in 100 fell at least once"
     assert "relative" not in words.detail
-    (row,) = patient_table(outcome, findings_with(outcome, patient), Choices())
+    (row,) = patient_table(findings_with(outcome, patient), Choices())
     assert row.difference == "the same number (4 fewer to 5 more)"
 
 

@@ -4,11 +4,8 @@ from __future__ import annotations
 
 import pytest
 
-from fourcount.appraisal.appraise import appraise
-from fourcount.record.paper import Choices
 from fourcount.wording import names
 from fourcount.wording.event_names import lacked_by, of_people, without_unit
-from fourcount.wording.patient import patient_words
 
 
 @pytest.mark.parametrize(
@@ -85,6 +82,3 @@ def test_an_outcome_is_named_without_its_unit(outcome_of):
     """Above a picture and in a letter."""
     outcome = outcome_of(name_text="Falls, %")
     assert names.outcome_name(outcome) == "Falls"
-    assert (
-        patient_words(outcome, appraise(outcome, Choices()), Choices(), 100).key_avoided == "falls avoided, on balance"
-    )

@@ -49,7 +49,7 @@ def all_texts(outcome, choices, *, with_working):
     yield from (mark_text(mark) for mark in findings.marks)
     yield own_line_sentence(outcome, findings)
     yield patient_sentence(outcome, findings, choices)
-    yield from (cell for row in patient_table(outcome, findings, choices) for cell in row)
+    yield from (cell for row in patient_table(findings, choices) for cell in row)
     yield from patient_table_head(outcome, findings, choices)
     if with_working:
         found = working(PATIENT, outcome, findings, choices)

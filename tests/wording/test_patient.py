@@ -29,13 +29,6 @@ def test_the_example_at_twelve_per_cent(outcome_of, findings_of):
     assert (words.without_title, words.with_title) == ("Without: usual care", "With: night lights")
     assert (words.without_count, words.without_percent) == ("12 in 100", "12%")
     assert (words.with_count, words.with_percent) == ("6 in 100", "6%")
-    assert (words.without_other, words.with_other) == ("88 did not fall", "94 did not fall")
-    assert (words.key_event, words.key_avoided, words.key_added, words.key_other) == (
-        "fell",
-        "falls avoided, on balance",
-        "",
-        "did not fall",
-    )
     assert (words.summary_bold, words.summary) == (
         "6 fewer in 100 fell at least once",
         "over 12 months, 95% interval 3 to 8",
@@ -82,32 +75,24 @@ def test_the_figures_say_what_they_rest_on(outcome_of, findings_of, changes, bas
 
 
 @pytest.mark.parametrize(
-    ("denominator", "count", "percent", "other"),
+    ("denominator", "count", "percent"),
     [
-        (100, "under 1 in 100", "0.3%", "over 99 did not fall"),
-        (1_000, "3 in 1,000", "0.3%", "997 did not fall"),
-        (10_000, "25 in 10,000", "0.25%", "9,975 did not fall"),
+        (100, "under 1 in 100", "0.3%"),
+        (1_000, "3 in 1,000", "0.3%"),
+        (10_000, "25 in 10,000", "0.25%"),
     ],
 )
-def test_counts_and_percentages_say_the_same(outcome_of, findings_of, denominator, count, percent, other):
+def test_counts_and_percentages_say_the_same(outcome_of, findings_of, denominator, count, percent):
     """The percentage has the digits of the count, and somebody is never nobody."""
     words = words_of(outcome_of(patient=at("0.25%")), findings_of, denominator)
-    assert (words.without_count, words.without_percent, words.without_other) == (count, percent, other)
+    assert (words.without_count, words.without_percent) == (count, percent)
 
 
 def test_what_cannot_be_drawn_is_still_said(outcome_of, findings_of):
     """Text on the smallest number of people that tells the two risks apart."""
     words = words_of(outcome_of(patient=at("0.01%")), findings_of, None)
-    assert words.scale == "Too small to draw as people."
     assert (words.without_count, words.with_count) == ("10 in 100,000", "5 in 100,000")
     assert words.summary_bold == "5 fewer in 100,000 fell at least once"
-
-
-def test_a_larger_picture_is_announced(outcome_of, findings_of):
-    """A change of scale is said on the picture."""
-    outcome = outcome_of(patient=at("1%"))
-    assert words_of(outcome, findings_of, 1_000).scale == "Each picture shows 1,000 people."
-    assert words_of(outcome, findings_of, 100).scale == ""
 
 
 def test_a_risk_beyond_everybody_is_withheld_and_the_odds_offered(outcome_of, findings_of):
@@ -115,7 +100,7 @@ def test_a_risk_beyond_everybody_is_withheld_and_the_odds_offered(outcome_of, fi
     words = words_of(outcome_of(patient=at("70%"), index_group="second"), findings_of, None)
     assert words.with_count == "not given"
     assert words.detail == "The risk would pass 100% here; the odds ratio can be carried instead."
-    assert (words.summary_bold, words.summary, words.scale) == ("", "", "")
+    assert (words.summary_bold, words.summary) == ("", "")
     assert "the odds ratio can be carried instead" in words.picture_sentence
 
 
@@ -146,23 +131,18 @@ def test_what_is_not_named_yet_is_listed(findings_of, outcome_of):
     assert words.without_title == "Without: reference group"
 
 
-def test_a_welcome_event_is_drawn_as_it_is_counted(outcome_of, findings_of):
-    """Picture, sentence and rows count the same people; fewer of a good event are lost, not avoided."""
+def test_a_welcome_event_is_said_as_it_is_counted(outcome_of, findings_of):
+    """Sentence and rows count the same people; fewer of a good event are a harm."""
     words = words_of(outcome_of(left_welcome=True, name_text="Recovery"), findings_of)
     assert (words.without_count, words.with_count) == ("17 in 100", "9 in 100")
-    assert (words.key_event, words.key_other) == ("fell", "did not fall")
-    assert (words.key_avoided, words.key_added) == ("recovery lost, on balance", "")
     assert words.summary_bold == "8 fewer in 100 fell at least once"
-    assert words.scale == "Filled: people with the welcome outcome."
     assert words.detail.startswith("NNTH at this starting risk 13")
     assert "In relative words 46% lower" in words.detail
 
 
-def test_where_the_other_outcome_is_counted_the_name_is_not_its_own(outcome_of, findings_of):
-    """ "Falls" names the left column: the key leaves it out, and what travels says so."""
+def test_where_the_other_outcome_is_counted_the_name_is_not_its_own(outcome_of):
+    """ "Falls" names the left column, and what travels says so."""
     outcome = outcome_of(counted="right")
-    words = words_of(outcome, findings_of)
-    assert (words.key_added, words.key_avoided) == ("gained, on balance", "")
     assert picture_heading(Record(outcomes=(outcome,)), outcome) == "Not “falls”"
 
 
@@ -172,7 +152,7 @@ def test_a_welcome_event_alone_has_to_be_named(outcome_of, findings_of):
     words = words_of(outcome_of((60, 40, 51, 49), left_welcome=True, **named), findings_of)
     assert words.missing == ()
     assert words.summary_bold == "9 more in 100 healed"
-    assert (words.without_percent, words.without_other) == ("51%", "49 did not")
+    assert words.without_percent == "51%"
 
 
 @pytest.mark.parametrize("welcome", [True, False])
@@ -198,10 +178,9 @@ def test_summary_range_and_caution_look_the_same_way(outcome_of, findings_of, we
             assert all(caution.facts == {"side": further} for caution in leaning)
 
 
-def test_more_events_are_added(outcome_of, findings_of):
-    """The key follows the direction."""
+def test_more_events_are_more(outcome_of, findings_of):
+    """The change follows the direction."""
     words = words_of(outcome_of(index_group="second", name_text=""), findings_of)
-    assert (words.key_avoided, words.key_added) == ("", "added, on balance")
     assert words.summary_bold == "8 more in 100 fell at least once"
 
 
@@ -214,10 +193,9 @@ def test_a_picture_that_travels_says_what_it_is_about():
     assert picture_heading(Record(), Outcome()) == ""
 
 
-def test_equal_risks_have_no_key_and_a_range(outcome_of, findings_of):
-    """No icon is avoided or added."""
+def test_equal_risks_have_a_range(outcome_of, findings_of):
+    """The same number, and what the interval leaves open on both sides."""
     words = words_of(outcome_of((10, 90, 10, 90)), findings_of)
-    assert (words.key_avoided, words.key_added) == ("", "")
     assert words.summary_bold == "The same number in 100 fell at least once"
     assert words.summary == "over 12 months, 95% interval 9 fewer to 9 more"
 
@@ -260,8 +238,6 @@ def test_headline_and_patient_speak_of_the_same_people(outcome_of, findings_of, 
     event = re.search(r"about [\d,]+ (.*?) within", headline(outcome, findings, Choices()))[1]
     assert COLUMNS_OF_WORDS[event] == counted
     assert words.summary_bold.endswith(f" {event}")
-    assert COLUMNS_OF_WORDS[words.key_event] == counted
-    assert COLUMNS_OF_WORDS[words.key_other] != counted
     first = re.match(r"Of 1,000 people with usual care ([\d,]+) \(.*?\) (.*?) within", words.picture_sentence)
     n, said = first.groups()
     assert COLUMNS_OF_WORDS[said] == counted
@@ -299,9 +275,3 @@ def test_an_interval_that_is_withheld_says_why(outcome_of, findings_of):
     words = patient_words(outcome, findings_of(outcome, choices), choices, 100)
     assert "An interval of zero width is withheld; the score family gives a real one." in words.detail
     assert words.summary == "over 12 months"
-
-
-@pytest.mark.parametrize(("name", "key"), [("Falls", "falls avoided, on balance"), ("x" * 41, "avoided, on balance")])
-def test_a_long_name_stays_out_of_the_key(outcome_of, findings_of, name, key):
-    """A key has room for forty characters of it."""
-    assert words_of(outcome_of(name_text=name), findings_of).key_avoided == key

@@ -119,6 +119,25 @@ def test_a_change_of_denominator_is_said(words_of: Callable[..., PictureWords]) 
     assert "people" not in words_of(drawn, Asked("bars")).note
 
 
+@pytest.mark.parametrize(
+    ("drawn", "asked", "said", "told"),
+    [
+        (Drawn(0.3, 0.304, 1_000), TWO, USUAL_WORDS, True),
+        (Drawn(0.004, 0.1, 1_000), Asked("one"), USUAL_WORDS, True),
+        (Drawn(0.024, 0.026, 1_000), TWO, USUAL_WORDS, False),
+        (Drawn(0.3, 0.304, 1_000), Asked("bars"), USUAL_WORDS, False),
+        (Drawn(0.3, 0.2), TWO, USUAL_WORDS, False),
+        (Drawn(0.5, 0.5004, 10_000), TWO, USUAL_WORDS, False),
+        (Drawn(0.3, 0.304, 1_000), TWO, Said("fall"), False),
+    ],
+)
+def test_bars_are_named_where_they_are_read_with_fewer_errors(
+    words_of: Callable[..., PictureWords], drawn: Drawn, asked: Asked, said: Said, told: bool
+) -> None:
+    """From 100 of 1,000 on, as McCaffery and colleagues tried it (2012), and never on a page for patients."""
+    assert words_of(drawn, asked, said).note.endswith("So many of 1,000 are read more exactly as bars.") == told
+
+
 def test_too_small_to_draw_is_said(words_of: Callable[..., PictureWords]) -> None:
     """Without a denominator the words speak of as many people as make the risks whole numbers."""
     words = words_of(Drawn(0.00001, 0.00002, None), bar_top=0.001)
@@ -161,6 +180,28 @@ def test_a_welcome_outcome_says_what_is_filled(words_of: Callable[..., PictureWo
     assert words.note == "Filled: people with the welcome outcome."
     assert (texts["added"], texts["avoided"]) == ("falls gained, on balance", "falls lost, on balance")
     assert words_of(Drawn(0.12, 0.06), said=Said(turned=True), left_welcome=True).note == ""
+
+
+@pytest.mark.parametrize(
+    ("name", "key"),
+    [
+        ("Falls", "falls avoided, on balance"),
+        ("Falls, %", "falls avoided, on balance"),
+        ("", "avoided, on balance"),
+        ("x" * 41, "avoided, on balance"),
+    ],
+)
+def test_a_long_name_stays_out_of_the_key(words_of: Callable[..., PictureWords], name: str, key: str) -> None:
+    """A key has room for forty characters of it, and its unit is none of them."""
+    texts = {entry.state: entry.text for entry in words_of(Drawn(0.12, 0.06), name_text=name).key}
+    assert texts["avoided"] == key
+
+
+def test_the_key_of_the_other_outcome_has_no_name(words_of: Callable[..., PictureWords]) -> None:
+    """ "Falls" names the left column: of those who did not fall nobody is called by it, and they are welcome."""
+    texts = {entry.state: entry.text for entry in words_of(Drawn(0.83, 0.91), counted="right").key}
+    assert (texts["affected"], texts["others"]) == ("did not fall", "fell")
+    assert (texts["added"], texts["avoided"]) == ("gained, on balance", "lost, on balance")
 
 
 def test_a_page_can_have_words_of_its_own(words_of: Callable[..., PictureWords]) -> None:

@@ -21,7 +21,7 @@ from fourcount.wording.names import effect_name, sentence_case
 from fourcount.wording.patient import WHICH_PEOPLE, patient_words
 from fourcount.wording.patient_labels import TABLE_CORNER, TABLE_ROW
 from fourcount.wording.patient_table import Row, patient_table, patient_table_head
-from fourcount.wording.ranks import people_of
+from fourcount.wording.ranks import people_for_all
 
 
 class PatientView(NamedTuple):
@@ -113,7 +113,7 @@ def _table(
     outcome: Outcome, findings: OutcomeFindings, patient: PatientFindings, choices: Choices, people: int | None
 ) -> dict[str, Any]:
     """The rows of the small table, of how many people they speak, and all of it in sentences."""
-    rows = patient_table(outcome, findings, choices, people)
+    rows = patient_table(findings, choices, people)
     if isinstance(patient.with_.estimate, Gap) and len(rows) == 1:
         return {}  # its reason stands above
     heads = patient_table_head(outcome, findings, choices, people)
@@ -124,7 +124,7 @@ def _table(
         )
         for row in rows
     )
-    corner = TABLE_CORNER.format(people=numbers.whole(people_of(patient, people)))
+    corner = TABLE_CORNER.format(people=numbers.whole(people_for_all(patient, people)))
     return {"rows": tuple(rows), "rows_corner": corner, "rows_sentence": " ".join(said)}
 
 

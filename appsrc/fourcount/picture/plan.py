@@ -145,12 +145,3 @@ def states_drawn(plan: Plan, arrangement: Arrangement) -> tuple[State, ...]:
     arrays = {"two": (plan.without, plan.with_), "one": (plan.with_,), "bars": ()}[arrangement]
     seen = {state for array in arrays for state, _, _ in array.runs()}
     return tuple(state for state in STATES if state in seen)
-
-
-def bars_are_easier(plan: Plan) -> bool:
-    """Whether so many icons are affected that a bar pair is read with fewer errors.
-
-    From 100 of 1,000 on (McCaffery and others 2012, of pictographs against bars).
-    """
-    most = max(plan.without_risk, plan.with_risk)
-    return plan.denominator is None or (plan.denominator > 100 and most >= 0.1)

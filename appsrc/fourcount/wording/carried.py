@@ -14,7 +14,7 @@ from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers, of_people
 from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.half_added import half_added
-from fourcount.wording.headline import choose
+from fourcount.wording.headline import people_for
 
 NOT_GIVEN = "not given"
 NO_WIDTH_NEEDED = f"{numbers.INFINITY}{numbers.TO}{numbers.INFINITY}"
@@ -28,13 +28,13 @@ NEVER_PAST = ("odds_ratio", "hazard_ratio", "rate_ratio")
 """Effects that no starting risk takes past 100%."""
 
 
-def denominator_for_text(patient: PatientFindings) -> int:
+def people_for_patient(patient: PatientFindings) -> int:
     """Where nothing can be drawn, the smallest round number of people whose whole numbers say what is so."""
     without = 0.0 if isinstance(patient.without.estimate, Gap) else patient.without.estimate
     with_, change = patient.with_.estimate, patient.difference.estimate
     if isinstance(with_, Gap) or isinstance(change, Gap):
         with_, change = without, 0.0
-    return choose(without, with_, change).denominator
+    return people_for(without, with_, change)
 
 
 def count(figure: Figure, people: int) -> str:
@@ -51,12 +51,7 @@ def bare_count(figure: Figure, people: int) -> str:
 
 def percentage(figure: Figure, people: int) -> str:
     """The same share as a percentage with the same digits: 12% of 100, 1.2% of 1,000."""
-    if isinstance(figure.estimate, Gap):
-        return ""
-    risk = figure.estimate
-    if of_people.hidden(risk, people):
-        return numbers.percent_whole(risk)
-    return f"{numbers.fixed_percent(risk, len(str(people)) - 3)}%"
+    return "" if isinstance(figure.estimate, Gap) else of_people.percentage(figure.estimate, people)
 
 
 def change(difference: Figure, people: int) -> str:

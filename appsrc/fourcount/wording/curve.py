@@ -21,7 +21,6 @@ BOTH = "the study and this patient"
 SHORT = {STUDY: "study", PATIENT: "patient", BOTH: "study and patient"}
 """Beside a point there is little room."""
 
-RANKS = {"low": "low", "usual": "usual", "high": "high"}
 FROM_HERE = ", past 100% from {start}"
 UP_TO_HERE = ", below 0% up to {start}"
 RATIO_AXIS = "{ratio} (odds ratio kept constant)"
@@ -183,8 +182,8 @@ def _whose(mark: CurveMark) -> str:
 
 def _mark_word(mark: CurveMark, *, short: bool = False) -> str:
     """``this patient, low``."""
-    whose, rank = _whose(mark), RANKS.get(mark.rank, "")
-    return ", ".join(part for part in (SHORT[whose] if short else whose, rank) if part)
+    whose = _whose(mark)
+    return ", ".join(part for part in (SHORT[whose] if short else whose, mark.rank) if part)
 
 
 def _mark_name(mark: CurveMark) -> str:

@@ -58,6 +58,11 @@ def choose(reference: float, index: float, difference: float, interval: Interval
     )
 
 
+def people_for(reference: float, index: float, difference: float) -> int:
+    """Of how many people two risks are told, where no picture says of how many."""
+    return choose(reference, index, difference).denominator
+
+
 def _true_at(denominator: int, reference: float, index: float, difference: float) -> bool:
     """Whether the rounded numbers differ, add up, and call nobody or everybody only who is."""
     first, second = numbers.people(reference, denominator), numbers.people(index, denominator)

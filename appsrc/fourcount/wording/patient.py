@@ -12,26 +12,20 @@ from fourcount.wording.basis import OWN_RANGE, basis, range_note
 from fourcount.wording.form import patient_choices
 from fourcount.wording.gaps import why_no_patient
 from fourcount.wording.headline import DO_NOT_ADD_UP
-from fourcount.wording.picture_sentence import WHICH_PEOPLE, others, picture_sentence
-from fourcount.wording.ranks import people_of, rank_lines
+from fourcount.wording.picture_sentence import WHICH_PEOPLE, picture_sentence
+from fourcount.wording.ranks import people_for_all, rank_lines
 from fourcount.wording.subject import BECAME_CASES, UNNAMED, subject
 
 __all__ = ["DO_NOT_ADD_UP", "WHICH_PEOPLE", "PatientWords", "missing", "patient_words", "picture_heading"]
 
-LONGEST_KEY = 40
-TOO_SMALL = "too small to draw"
-WELCOME_DRAWN = "Filled: people with the welcome outcome."
-
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class PatientWords:
-    """Every text of the patient's column and picture; "" where there is nothing to say.
+    """Every text of the patient's column; "" where there is nothing to say. The picture's own are ``picture_words``.
 
     ``missing`` names what the reader has not named yet, without which no patient is shown a picture.
     ``basis`` says what starting risk and what effect everything rests on, and another time span.
-    ``scale`` says that the picture shows more than 100 people, or that it is too small to draw.
-    ``range_note`` says what the interval of the difference holds; it stands in ``detail`` unless it is the study's own.
-    ``who`` names the people who are counted. ``ranks`` are a line each for a low and a high starting risk.
+    ``ranks`` are a line each for a low and a high starting risk.
     """
 
     without_title: str
@@ -42,19 +36,10 @@ class PatientWords:
     with_count: str = ""
     with_percent: str = ""
     with_interval: str = ""
-    without_other: str = ""
-    with_other: str = ""
-    key_event: str = ""
-    key_avoided: str = ""
-    key_added: str = ""
-    key_other: str = ""
     summary_bold: str = ""
     summary: str = ""
     detail: str = ""
     basis: str = ""
-    range_note: str = ""
-    who: str = ""
-    scale: str = ""
     ranks: tuple[str, ...] = ()
     missing: tuple[str, ...] = ()
     picture_sentence: str = ""
@@ -69,10 +54,9 @@ def patient_words(
     if isinstance(patient, Gap):
         why = why_no_patient(patient, findings.form, next(iter(findings.measures), ""))
         return PatientWords(without_title=without_title, with_title=with_title, detail=why, missing=missing(outcome))
-    people = denominator or people_of(patient)
+    people = denominator or people_for_all(patient)
     patient = starts.at_one_level(patient, choices)
     choices = patient_choices(findings, choices)
-    change = patient.difference.estimate
     return PatientWords(
         without_title=without_title,
         with_title=with_title,
@@ -82,20 +66,11 @@ def patient_words(
         with_count=carried.count(patient.with_, people),
         with_percent=carried.percentage(patient.with_, people),
         with_interval=_levelled(carried.risk_limits(patient.with_, people), choices),
-        without_other=others(patient.without, people, spoken),
-        with_other=others(patient.with_, people, spoken),
-        key_event=names.event_key(spoken),
-        key_avoided=_key("avoided", spoken) if not isinstance(change, Gap) and change < 0 else "",
-        key_added=_key("added", spoken) if not isinstance(change, Gap) and change > 0 else "",
-        key_other=names.other_key(spoken),
         summary_bold=_change_said(spoken, patient.difference, people),
         summary=_summary(outcome, patient, choices, people),
         detail=_detail(outcome, patient, findings, people),
         basis=basis(outcome, patient, choices),
-        range_note=range_note(outcome, patient),
-        who=starts.who(outcome, patient, people),
-        scale="" if isinstance(change, Gap) else _scale(spoken, denominator),
-        ranks=rank_lines(outcome, findings, choices, people_of(patient, people)),
+        ranks=rank_lines(outcome, findings, choices, people_for_all(patient, people)),
         missing=missing(outcome),
         picture_sentence=picture_sentence(outcome, findings, patient, choices, people),
     )
@@ -135,13 +110,6 @@ def _levelled(interval: str, choices: Choices) -> str:
     return f"{limits.interval_name(choices.level)} {interval}" if interval else ""
 
 
-def _key(verb: str, outcome: Outcome) -> str:
-    if outcome.welcome:
-        verb = {"avoided": "lost", "added": "gained"}[verb]
-    name = names.mid_sentence(names.outcome_name(outcome)) if outcome.counted == "left" else ""
-    return f"{name} {verb}, on balance" if name and len(name) <= LONGEST_KEY else f"{verb}, on balance"
-
-
 def _change_said(outcome: Outcome, difference: Figure, people: int) -> str:
     """``6 fewer in 100 fell at least once``."""
     change = carried.change(difference, people)
@@ -172,13 +140,3 @@ def _adds_up(patient: PatientFindings, people: int) -> bool:
     parts = (patient.without.estimate, patient.with_.estimate, patient.difference.estimate)
     rounded = [0 if isinstance(part, Gap) else numbers.people(part, people) for part in parts]
     return any(isinstance(part, Gap) for part in parts) or abs(rounded[1] - rounded[0]) == rounded[2]
-
-
-def _scale(named: Outcome, denominator: int | None) -> str:
-    """What has to be said of the picture itself: what it counts, how many people it shows, or why it shows none."""
-    parts = [WELCOME_DRAWN] if named.welcome else []
-    if denominator is None:
-        parts.append(f"{TOO_SMALL[0].upper()}{TOO_SMALL[1:]} as people.")
-    elif denominator != 100:
-        parts.append(f"Each picture shows {numbers.whole(denominator)} people.")
-    return " ".join(parts)

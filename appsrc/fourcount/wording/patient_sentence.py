@@ -8,7 +8,7 @@ from fourcount.record.paper import Choices
 from fourcount.wording import carried, limits, names, numbers, of_people, spans, starts
 from fourcount.wording.basis import OWN_RANGE, range_note
 from fourcount.wording.form import patient_choices
-from fourcount.wording.ranks import people_of, rank_lines
+from fourcount.wording.ranks import people_for_all, rank_lines
 from fourcount.wording.subject import subject
 
 AS_IN_THE_STUDY = "The study’s figures hold as they stand."
@@ -21,7 +21,7 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
         return ""
     patient = starts.at_one_level(patient, choices)
     choices = patient_choices(findings, choices)
-    people = people_of(patient)
+    people = people_for_all(patient)
     ranks = rank_lines(outcome, findings, choices, people)
     if starts.as_in_the_study(patient):
         return " ".join((AS_IN_THE_STUDY, *ranks))

@@ -11,7 +11,7 @@ from fourcount.wording import carried, limits, names, numbers, spans, starts
 from fourcount.wording.form import patient_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.patient import titles
-from fourcount.wording.ranks import people_of
+from fourcount.wording.ranks import people_for_all
 
 START = "Starting {risk}"
 DIFFERENCE = "Difference"
@@ -31,9 +31,7 @@ class Row(NamedTuple):
     number_needed: str
 
 
-def patient_table(
-    _outcome: Outcome, findings: OutcomeFindings, choices: Choices, denominator: int | None = None
-) -> list[Row]:
+def patient_table(findings: OutcomeFindings, choices: Choices, denominator: int | None = None) -> list[Row]:
     """``12%: 12, 6 (4 to 9), 6 fewer (3 to 8), NNTB 19 (14 to 38)``: low, usual and high in this order, or the one row.
 
     All rows count the same number of people: ``denominator`` where it is given, a power of ten, and more only where
@@ -42,7 +40,7 @@ def patient_table(
     usual = findings.patient
     if isinstance(usual, Gap):
         return []
-    people, usual = people_of(usual, denominator), starts.at_one_level(usual, choices)
+    people, usual = people_for_all(usual, denominator), starts.at_one_level(usual, choices)
     ranked = (("low", usual.low), ("", usual), ("high", usual.high))
     return [_row(rank, one, findings, people) for rank, one in ranked if one is not None]
 
@@ -58,7 +56,7 @@ def patient_table_head(
         return Row(start, without, with_, DIFFERENCE, NUMBER_NEEDED)
     level = limits.interval_name(patient_choices(findings, choices).level)
     span = "" if patient.other_span is None else f", {spans.over(outcome, patient)}"
-    counted = f"{span}, in {numbers.whole(people_of(patient, denominator))} ({level})"
+    counted = f"{span}, in {numbers.whole(people_for_all(patient, denominator))} ({level})"
     needed = f"{NUMBER_NEEDED} ({level})"
     return Row(start, f"{without}{counted}", f"{with_}{counted}", f"{DIFFERENCE}{counted}", needed)
 

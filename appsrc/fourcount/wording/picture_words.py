@@ -13,18 +13,24 @@ from fourcount.record.paper import Choices
 from fourcount.wording import names, numbers, of_people
 from fourcount.wording.axis import axis_words
 from fourcount.wording.form import patient_choices
-from fourcount.wording.headline import choose
+from fourcount.wording.headline import people_for
 from fourcount.wording.limits import interval_name
-from fourcount.wording.patient import LONGEST_KEY, WELCOME_DRAWN, titles
+from fourcount.wording.patient import titles
 from fourcount.wording.subject import subject
 
 KeyState = Literal["affected", "added", "uncertain", "avoided", "others"]
 
+LONGEST_KEY = 40
+WELCOME_DRAWN = "Filled: people with the welcome outcome."
 TOO_SMALL = "Too small to draw as people."
 TOO_CLOSE = "A difference too small to draw as people."
 ONE_IN_THE_LARGEST = 0.00005  # half an icon of ten thousand
 MORE_PEOPLE = "{picture} shows {people} people, not 100."
 EACH = {"two": "Each picture", "one": "The picture"}
+BARS_FROM = 0.1
+BARS = "So many of 1,000 are read more exactly as bars."
+"""From 100 of 1,000 on readers of arrays made more errors than readers of bars (McCaffery and colleagues 2012)."""
+
 BAR_END = "The bars run to {end}, not to 100%."
 EITHER_WAY = "{words} either way"
 OPEN = "left open by the interval"
@@ -52,15 +58,15 @@ class PictureWords(NamedTuple):
     """All words of a picture.
 
     ``key`` has every state that could be drawn; a picture shows the entries of those that are. ``note`` says a
-    denominator other than 100, or that the risks are too small to draw. ``lines`` belong below a picture that leaves
-    the window. ``bar_ends`` are the ends of the scale on which the bars are drawn.
+    denominator other than 100, that the risks are too small to draw, or that bars are easier to read. ``lines`` belong
+    below a picture that leaves the window. ``bar_ends`` are the ends of the scale on which the bars are drawn.
     """
 
     without: Side
     with_: Side
     key: tuple[KeyEntry, ...]
     note: str
-    lines: tuple[str, ...]
+    lines: tuple[str, ...] = ()
     bar_ends: tuple[str, str] = ("", "")
 
 
@@ -110,10 +116,7 @@ class Asked(Protocol):
 
 def people_of(drawn: Drawn) -> int:
     """Of how many people the captions speak: those drawn, else a round number that says what is so."""
-    return (
-        drawn.denominator
-        or choose(drawn.without_risk, drawn.with_risk, drawn.with_risk - drawn.without_risk).denominator
-    )
+    return drawn.denominator or people_for(drawn.without_risk, drawn.with_risk, drawn.with_risk - drawn.without_risk)
 
 
 def picture_words(
@@ -137,7 +140,6 @@ def picture_words(
         with_=_side(said.with_title or with_title, drawn.with_risk, people, other),
         key=_key(outcome, asked, said),
         note=" ".join(part for part in _notes(outcome, drawn, asked, said, level, bar_top) if part),
-        lines=(),
         bar_ends=(low, high),
     )
 
@@ -190,7 +192,9 @@ def _notes(outcome: Outcome, drawn: Drawn, asked: Asked, said: Said, level: str,
         scale = MORE_PEOPLE.format(picture=EACH[asked.arrangement], people=numbers.whole(drawn.denominator))
     bars = drawn.denominator is None or asked.arrangement not in EACH
     ends = BAR_END.format(end=numbers.percent_given(bar_top)) if bars and bar_top < 1 else ""
-    return welcome, scale, ends, _interval(outcome, drawn, asked, said, level)
+    many = max(drawn.without_risk, drawn.with_risk) >= BARS_FROM and drawn.denominator == 1_000
+    hint = BARS if many and asked.arrangement in EACH and said == USUAL_WORDS else ""
+    return welcome, scale, hint, ends, _interval(outcome, drawn, asked, said, level)
 
 
 def _interval(outcome: Outcome, drawn: Drawn, asked: Asked, said: Said, level: str) -> str:

@@ -15,14 +15,14 @@ AT_RANK = "At the {rank} starting risk"
 MOST = 10**9
 
 
-def people_of(patient: PatientFindings, denominator: int | None = None) -> int:
+def people_for_all(patient: PatientFindings, denominator: int | None = None) -> int:
     """The one number of people by which low, usual and high are told.
 
     It is ``denominator`` where that is given, that of the picture, and ten times as many only where somebody would be
     nobody, nearly all all, or a difference less than one of them.
     """
     found = [one for one in (patient, patient.low, patient.high) if isinstance(one, PatientFindings)]
-    people = denominator or max(carried.denominator_for_text(one) for one in found)
+    people = denominator or max(carried.people_for_patient(one) for one in found)
     while people < MOST and not all(_told_by(one, people) for one in found if one is not patient):
         people *= 10
     return people

@@ -10,15 +10,12 @@ from fourcount.record.entry.risk import read_risk
 from fourcount.record.entry.starting import read_share, read_starting_risk
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from fourcount.wording import limits, names, numbers, of_people, spans
+from fourcount.wording import limits, names, numbers, spans
 
-RANKS = {"low": "low", "usual": "usual", "high": "high"}
 OWN = "the study’s own starting {risk}"
 OWN_ROW = "the study’s own"
 FROM_RATE = "from {rate}{over}"
 FROM_OVERALL = "from an overall risk of {overall}, {share} having the exposure"
-LIKE_THE_STUDY = "people like those in the study"
-WHO_START_AT = "people who start at a {risk} of {count} in {people}"
 
 
 def own(patient: PatientFindings) -> bool:
@@ -31,12 +28,9 @@ def as_in_the_study(patient: PatientFindings) -> bool:
     return own(patient) and patient.range_from == "table" and patient.other_span is None
 
 
-def who(outcome: Outcome, patient: PatientFindings, people: int) -> str:
-    """Whom the figures are about: "people who start at a risk of 12 in 100", never "your risk"."""
-    if own(patient) or isinstance(patient.without.estimate, Gap):
-        return LIKE_THE_STUDY
-    count = of_people.affected(patient.without.estimate, people)
-    return WHO_START_AT.format(risk=names.risk_name(outcome), count=count, people=numbers.whole(people))
+def like_the_study(patient: PatientFindings) -> bool:
+    """Whether these are people like those in the study: at its own starting risk, over its own time, by any effect."""
+    return own(patient) and patient.other_span is None
 
 
 def value(patient: PatientFindings) -> str:
@@ -46,7 +40,7 @@ def value(patient: PatientFindings) -> str:
 
 def named(patient: PatientFindings) -> str:
     """``12%``, ``low, 5%``, ``the study’s own, 17.1%``; over the study's span where the figures are over another."""
-    name = OWN_ROW if own(patient) else RANKS.get(patient.rank, "")
+    name = OWN_ROW if own(patient) else patient.rank
     risk = f"{value(patient)}{spans.of_the_start(patient)}"
     return f"{name}, {risk}" if name else risk
 
@@ -65,7 +59,7 @@ def at_one_level(patient: PatientFindings, choices: Choices) -> PatientFindings:
 
 def given(outcome: Outcome, patient: PatientFindings, choices: Choices) -> str:
     """``Starting risk 12% over 12 months (24 of 200, 95% interval 8.2 to 17.2%; a register)``."""
-    what = " ".join(part for part in (RANKS.get(patient.rank, ""), "starting risk", value(patient)) if part)
+    what = " ".join(part for part in (patient.rank, "starting risk", value(patient)) if part)
     source = names.bare(outcome.patient.starting_risk_source_text)
     reading = _reading(outcome, patient)
     precise = ", ".join(part for part in (_counted(reading), _interval(patient, reading, choices)) if part)
