@@ -95,6 +95,7 @@ class MeasureRow(QAbstractButton):
         self._scale: Scale | None = None
         self._axis: tuple[str, str, str] | None = None
         self._open = False
+        self._heights: dict[int, int] = {}
         self.setFocusPolicy(Qt.FocusPolicy.TabFocus)
         self.setCursor(Qt.CursorShape.PointingHandCursor)
         policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
@@ -110,6 +111,7 @@ class MeasureRow(QAbstractButton):
         if (line, scale, axis, is_open) == (self._line, self._scale, self._axis, self._open):
             return
         self._line, self._scale, self._axis, self._open = line, scale, axis, is_open
+        self._heights.clear()
         self.updateGeometry()
         self.update()
         values = line.withheld or ", ".join(part for part in (line.estimate, line.interval) if part)
@@ -155,7 +157,11 @@ class MeasureRow(QAbstractButton):
         painter.end()
 
     def _height(self, width: int) -> int:
-        return round(self._run(None, self._line, width)) if self._line else self._look.px(48)
+        if not self._line:
+            return self._look.px(48)
+        if width not in self._heights:  # a layout asks many times
+            self._heights[width] = round(self._run(None, self._line, width))
+        return self._heights[width]
 
     def _run(self, painter: QPainter | None, line: MeasureLine, width: float) -> float:
         """Walk down the row and give its height; without a painter only measure."""
@@ -262,5 +268,6 @@ class MeasureRow(QAbstractButton):
         self.chosen.emit(self.key)
 
     def _on_look_changed(self) -> None:
+        self._heights.clear()
         self.updateGeometry()
         self.update()
