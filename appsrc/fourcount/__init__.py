@@ -11,7 +11,7 @@ if TYPE_CHECKING:
     from fourcount.publish.answer import answer
     from fourcount.publish.read import read
 
-__version__ = "0.2.0"
+__version__ = "0.3.0"
 __all__ = ["__version__", "answer", "read"]
 
 

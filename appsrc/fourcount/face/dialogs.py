@@ -102,6 +102,7 @@ def about_window(look: Look, parent: QWidget) -> HelpWindow:
         "font": family_in_use(),
         "numpy": of("numpy"),
         "scipy": of("scipy"),
+        "matplotlib": of("matplotlib"),
         "qt": qVersion(),
     }
     first, *rest = (line.format(**facts) for line in labels.ABOUT)

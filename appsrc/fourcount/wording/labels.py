@@ -229,7 +229,10 @@ ABOUT = (
     "Fourcount {version}",
     "Re-enter what a paper prints, see whether it adds up, what it says, and what that means for one patient.",
     "Free software under the MIT licence. It works offline, sends nothing, and keeps no file.",
-    "Text in the system’s font {font}; computed with numpy {numpy} and scipy {scipy}; drawn with Qt {qt}.",
+    (
+        "Text in the system’s font {font}; computed with numpy {numpy} and scipy {scipy}; drawn with Qt {qt} and "
+        "matplotlib {matplotlib}."
+    ),
 )
 
 HELP_TITLES = {"methods": "Methods and sources", "keys": "Keys", "about": "About Fourcount"}
