@@ -64,4 +64,4 @@ PATIENT_KEYS = (
 )
 PATIENT_KEYS_OF_THREE = ("rank", "low", "high")
 LINE_KEYS = ("kind", "measure", "value", "lies", "worse_side", "level")
-LINE_KEYS_OF_A_MARGIN = ("p", "method")
+LINE_KEYS_OF_A_MARGIN = ("p", "method", "parted")

@@ -4,13 +4,18 @@ from __future__ import annotations
 
 import itertools
 import math
+from typing import Any
 
 import msgspec
 import pytest
+from hypothesis import given
+from hypothesis import strategies as st
 
+from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, Interval, OwnLine, Range
 from fourcount.appraisal.own_line import MEASURES_OF, own_line, where_it_lies
-from fourcount.record.outcome import LINE_SCALES, EventsAndOthers, LineSide, Outcome
+from fourcount.record.outcome import CELLS, LINE_SCALES, EventsAndOthers, LineSide, Outcome
+from fourcount.record.paper import FAMILIES, Choices, Family
 from fourcount.stats import difference, odds, ratio
 from fourcount.stats.estimates import odds_ratio, risk_difference, risk_ratio
 from fourcount.stats.margins import margin_p, margin_p_from_interval
@@ -140,6 +145,37 @@ def test_the_p_of_a_margin_and_its_side_agree(text: str) -> None:
         line = line_of(drawn(line_kind="margin", line_text=text, line_side=side, left_welcome=welcome))
         assert isinstance(line.p, float)
         assert (line.p < 0.025) == (line.lies == ("short" if line.worse_side else "beyond"))
+
+
+def test_interval_and_p_of_different_methods_may_part() -> None:
+    """2 of 50 v 0 of 50 by the textbook formula: all of the interval is better than 10 more, and p is 0.080."""
+    tight = margin_of((2, 48, 0, 50), "textbook")
+    assert (tight.lies, tight.worse_side, tight.parted) == ("short", True, True)
+    assert tight.p == pytest.approx(0.080, abs=5e-4)
+    score = margin_of((2, 48, 0, 50), "score")
+    assert (score.lies, score.parted) == ("across", False)
+
+
+@given(st.tuples(*[st.integers(0, 30)] * 4), st.sampled_from(FAMILIES), st.sampled_from(["RD", "RR", "OR"]))
+def test_a_margin_says_wherever_its_interval_and_its_p_part(counts: Any, family: Family, scale: str) -> None:
+    """Wherever p is small and the interval does not lie on the better side, or the other way round; by score never."""
+    line = margin_of(counts, family, scale)
+    if isinstance(line, OwnLine) and isinstance(line.p, float):
+        assert line.parted == ((line.p < 0.025) != (line.lies == "short"))
+        assert not line.parted or (family, scale) not in (("score", "RD"), ("score", "RR"))
+
+
+def margin_of(counts: tuple[int, int, int, int], family: Family, scale: str = "RD") -> Any:
+    """A margin of 10 more per 100, or of a ratio of 1.5, beside four counts."""
+    scales = {"RD": "risk_difference", "RR": "risk_ratio", "OR": "odds_ratio"}
+    outcome = Outcome(
+        table=EventsAndOthers(**dict(zip(CELLS, map(str, counts), strict=True))),
+        line_kind="margin",
+        line_scale=scales[scale],  # type: ignore[arg-type]
+        line_side="more",
+        line_text="10 per 100" if scale == "RD" else "1.5",
+    )
+    return appraise(outcome, Choices(family=family)).line
 
 
 @pytest.mark.parametrize("key", ["pooled_risk_ratio", "pair_ratio", "risk_ratio"])

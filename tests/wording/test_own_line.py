@@ -26,6 +26,14 @@ def a_margin(**changes: Any) -> OwnLine:
     return a_line(kind="margin", value=0.02, worse_side=True, lies="short", p=0.0123, method="margin-score", **changes)
 
 
+def test_a_margin_says_where_its_interval_and_its_p_disagree() -> None:
+    """They rest on different methods, and one sentence would otherwise say two things."""
+    outcome = Outcome(line_kind="margin")
+    said = line_sentence(outcome, a_margin(parted=True))
+    assert said.endswith("The interval rests on another method than the p, and here the two disagree.")
+    assert said.startswith(line_sentence(outcome, a_margin()))
+
+
 @pytest.mark.parametrize(
     ("lies", "said"),
     [

@@ -7,6 +7,7 @@ from typing import Literal, cast
 
 from fourcount.appraisal.case import no_effect_of
 from fourcount.appraisal.findings import AnyNumberNeeded, Figure, Gap, Interval, Mark, OwnLine, Range
+from fourcount.appraisal.turning import welcome_of_effects
 from fourcount.record.entry.margin import read_margin
 from fourcount.record.entry.readings import Blank, Unreadable
 from fourcount.record.outcome import LineScale, LineSide, Outcome
@@ -60,16 +61,19 @@ def _against(
     lies = where_it_lies(figure.interval, value, outcome.line_side)
     if isinstance(lies, Gap):
         return lies
-    margin = outcome.line_kind == "margin"
+    margin, welcome = outcome.line_kind == "margin", welcome_of_effects(outcome)
     whole = counts if key in OF_COUNTS else None
+    worse_side = (outcome.line_side == "fewer") == welcome
+    # Always against what is worse than the margin, so that a small p speaks for the better side of it.
+    p = _p(key, figure, whole, value, "fewer" if welcome else "more", level) if margin else None
     return OwnLine(
         kind="margin" if margin else "matters",
         measure=key,
         value=value,
         lies=lies,
-        worse_side=(outcome.line_side == "fewer") == outcome.welcome,
-        # Always against what is worse than the margin, so that a small p speaks for the better side of it.
-        p=_p(key, figure, whole, value, "fewer" if outcome.welcome else "more", level) if margin else None,
+        worse_side=worse_side,
+        p=p,
+        parted=isinstance(p, float) and (p < (1.0 - level) / 2.0) != (lies == ("short" if worse_side else "beyond")),
         method=(PRINTED if whole is None else SCORE) if margin else "",
         level=level,
     )

@@ -6,7 +6,7 @@ import math
 
 from fourcount.appraisal.extras.printed import DIFFERENCES
 from fourcount.appraisal.findings import Figure, Gap, Interval
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import EffectOnly, Outcome, Pairs
 
 TURNED = ("odds_ratio", "risk_difference")
 """The effects that say the same of the other outcome: an odds ratio turned over, a difference with its sign changed."""
@@ -18,6 +18,14 @@ def oriented_effect(figure: Figure, measure: str, outcome: Outcome) -> Figure | 
         return Gap("other-outcome-unknown")
     turns = (outcome.index_group == "second") + (not outcome.counts_left)
     return turned(figure, measure) if turns == 1 else figure
+
+
+def welcome_of_effects(outcome: Outcome) -> bool:
+    """Whether the event that the outcome's effects are of is welcome.
+
+    A matched case-control study counts the exposed among cases and controls; its odds ratio is of becoming a case.
+    """
+    return outcome.welcome and not (outcome.design == "matched" and isinstance(outcome.table, Pairs | EffectOnly))
 
 
 def turned(figure: Figure, measure: str) -> Figure:

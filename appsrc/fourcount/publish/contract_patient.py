@@ -62,7 +62,7 @@ def line_json(line: OwnLine | Gap) -> Json:
         "worse_side": line.worse_side,
         "level": line.level,
     }
-    return found if line.p is None else {**found, "p": value_json(line.p), "method": line.method}
+    return found if line.p is None else {**found, "p": value_json(line.p), "method": line.method, "parted": line.parted}
 
 
 def _whole_interval(patient: PatientFindings) -> object:

@@ -22,6 +22,7 @@ MARGIN = {
 }
 BY = {"margin-score": "Miettinen–Nurminen", "margin-printed": "from the interval"}
 MARK = "Flag: your {kind}, {value}."
+PARTED = " The interval rests on another method than the p, and here the two disagree."
 KINDS = {"matters": "line", "margin": "margin"}
 
 
@@ -43,7 +44,7 @@ def line_sentence(outcome: Outcome, line: OwnLine) -> str:
     if line.kind == "matters":
         return f"{subject} {MATTERS[line.lies].format(value=value_text(line))}."
     side = "across" if line.lies == "across" else _side(line)
-    return f"{subject} {MARGIN[side].format(value=value_text(line))}{_p(line)}"
+    return f"{subject} {MARGIN[side].format(value=value_text(line))}{_p(line)}{PARTED if line.parted else ''}"
 
 
 def value_text(line: OwnLine) -> str:

@@ -75,8 +75,8 @@ def test_an_effect_that_is_not_there_gives_way_to_the_usual_one(chosen, carried)
 
 
 def test_an_adjusted_effect_at_the_own_risk_takes_its_limits_there():
-    """It is no figure of this table: its limits hold at the reference risk, which keeps its own interval."""
-    findings = found(of_total(design="cohort", **ADJUSTED))
+    """It is no figure of this table: its limits hold at the reference risk, which keeps its own interval at 90%."""
+    findings = found(of_total(design="cohort", **ADJUSTED), level=0.90)
     patient, reference = findings.patient, findings.measures["risk_reference"]
     assert (patient.range_from, patient.start_from, patient.without) == ("effect", "reference", reference)
     odds = 0.45 * reference.estimate / (1 - reference.estimate)
@@ -127,6 +127,18 @@ def test_before_and_after_have_no_number_needed(typed):
     """Nobody tells what would have happened without the treatment."""
     patient = found(paired("before-after", patient=Patient(starting_risk_text=typed))).patient
     assert patient.number_needed == Gap("design-before-after")
+
+
+@pytest.mark.parametrize(
+    "make", [paired, lambda design, **rest: effect_only("odds_ratio", "0.5 (0.3 to 0.8)", design=design, **rest)]
+)
+@pytest.mark.parametrize("welcome", [True, False])
+def test_becoming_a_case_is_never_welcome(make, welcome):
+    """Night lights halve the odds of being a case: a number needed to benefit, whatever is thought of night lights."""
+    typed = {"left_welcome": welcome, "line_kind": "margin", "line_scale": "odds_ratio", "line_text": "1.2"}
+    findings = found(make("matched", patient=Patient(starting_risk_text="20%"), line_side="more", **typed))
+    assert findings.patient.number_needed.kind == "NNTB"
+    assert findings.line.worse_side
 
 
 def test_a_matched_study_carries_the_odds_ratio_of_its_pairs():

@@ -24,6 +24,7 @@ from fourcount.appraisal.findings import (
 )
 from fourcount.appraisal.measures import number_needed_from
 from fourcount.appraisal.reach import risk_within_reach
+from fourcount.appraisal.turning import welcome_of_effects
 from fourcount.record.entry.starts import StartReading
 from fourcount.record.outcome import Outcome
 
@@ -151,7 +152,7 @@ def _whole(own: Figure) -> Interval | Gap:
 def _number_needed(study: Study, difference: Figure) -> AnyNumberNeeded | Gap:
     if study.number_needed is not None:
         return Gap(study.number_needed)
-    return number_needed_from(difference, welcome=study.outcome.welcome)
+    return number_needed_from(difference, welcome=welcome_of_effects(study.outcome))
 
 
 def _conversion(study: Study, start: Start | Gap, patient: PatientFindings | Gap) -> Conversion | Gap:

@@ -91,10 +91,11 @@ class OwnLine(msgspec.Struct, frozen=True, kw_only=True):
 
     ``value`` is on the scale of ``measure``: a difference is index minus reference (so 5 fewer per 100 is -0.05), a
     ratio as it is. ``lies`` is where the interval lies against the line, counted away from no effect on the line's own
-    side: "beyond" (wholly past the line), "short" (wholly on the side of no effect) or "across". For a margin, "short"
-    means that the margin is not reached, which is non-inferiority where the side is the worse one. ``p`` is
+    side: "beyond" (wholly past the line), "short" (wholly on the side of no effect) or "across". A margin on the worse
+    side with the interval "short" of it is non-inferiority. ``p`` is
     one-sided, of the hypothesis that the effect is the margin's or worse, whichever side of no effect the margin lies
     on (Miettinen and Nurminen's statistic where there are counts), by the method ``method``; only a margin has one.
+    ``parted`` says that p and interval tell different things of the margin, as those of different methods can.
     ``level`` is that of the interval.
     """
 
@@ -105,4 +106,5 @@ class OwnLine(msgspec.Struct, frozen=True, kw_only=True):
     worse_side: bool
     p: float | Gap | None = None
     method: str = ""
+    parted: bool = False
     level: float = USUAL_LEVEL

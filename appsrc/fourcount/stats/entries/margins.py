@@ -14,8 +14,8 @@ MARGINS = (
         ),
         source="Miettinen and Nurminen 1985, Stat Med 4:213; Farrington and Manning 1990, Stat Med 9:1447",
         note=(
-            "Of the hypothesis that the effect is the margin’s or worse. Below 0.025 exactly where the 95% score "
-            "interval lies wholly on the better side of the margin."
+            "Of the hypothesis that the effect is the margin’s or worse. Below 0.025 exactly where Miettinen and "
+            "Nurminen’s own 95% interval lies wholly on the better side of the margin; another one may disagree."
         ),
     ),
     Calculation(
