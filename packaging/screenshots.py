@@ -80,7 +80,34 @@ def take(shot: Shot, folder: Path, application: QApplication) -> None:
         for _ in range(3):
             application.processEvents()
         window.grab().save(str(folder / f"{shot.name}.png"))
+        if shot.name == "light":
+            take_patient(window, folder, application)
         window.hide()
+
+
+def take_patient(window: MainWindow, folder: Path, application: QApplication) -> None:
+    """The page that a patient is shown, and the one to print."""
+    from datetime import date
+
+    from fourcount import __version__
+    from fourcount.appraisal.appraise import appraise
+    from fourcount.face.patient_screen import open_screen
+    from fourcount.ink.handout import PAPERS, NoPage, compose
+    from fourcount.ink.handout_file import page_image
+
+    screen = open_screen(window)
+    if screen is not None:
+        screen.showNormal()
+        screen.resize(1280, 800)
+        for _ in range(3):
+            application.processEvents()
+        screen.grab().save(str(folder / "patient.png"))
+        screen.close()
+    record = window.session.record
+    named = [(outcome, appraise(outcome, record.choices)) for outcome in record.outcomes]
+    page = compose(record, named, PAPERS["a4"], __version__, date(2026, 12, 1))
+    if not isinstance(page, NoPage):
+        page_image(page, 96).save(str(folder / "handout.png"))
 
 
 def main() -> int:
