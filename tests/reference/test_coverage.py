@@ -2,28 +2,12 @@
 
 from __future__ import annotations
 
-import importlib.util
-import sys
-from pathlib import Path
-from types import ModuleType
-
 import pytest
 
 from fourcount.stats.methods import method
+from reference_command import reference_command
 
-
-def _load() -> ModuleType:
-    """coverage.py beside this file, which is a command and no package."""
-    specification = importlib.util.spec_from_file_location("real_coverage", Path(__file__).parent / "coverage.py")
-    assert specification is not None
-    assert specification.loader is not None
-    module = importlib.util.module_from_spec(specification)
-    sys.modules[specification.name] = module
-    specification.loader.exec_module(module)
-    return module
-
-
-real_coverage = _load()
+real_coverage = reference_command("coverage")
 
 RISKS = (0.05, 0.2, 0.4, 0.5, 0.7, 0.95)
 

@@ -2,30 +2,12 @@
 
 from __future__ import annotations
 
-import importlib.util
-import sys
-from pathlib import Path
-from types import ModuleType
-
 import pytest
 
 from fourcount.stats import homogeneity, strata
+from reference_command import reference_command
 
-
-def _load() -> ModuleType:
-    """pooled_coverage.py beside this file, which is a command and no package."""
-    specification = importlib.util.spec_from_file_location(
-        "pooled_coverage", Path(__file__).parent / "pooled_coverage.py"
-    )
-    assert specification is not None
-    assert specification.loader is not None
-    module = importlib.util.module_from_spec(specification)
-    sys.modules[specification.name] = module
-    specification.loader.exec_module(module)
-    return module
-
-
-simulation = _load()
+simulation = reference_command("pooled_coverage")
 LARGE = simulation.DESIGNS[0]
 MATCHED = simulation.DESIGNS[4]
 SETS = 600

@@ -1,7 +1,8 @@
-"""Every figure of published_carrying.json, and the printed limits of published.json put back as margins.
+"""Every figure of published_carrying.json and oracle_carrying.json, and printed limits put back as margins.
 
-Each figure is tested twice: to the digits that its source prints, and to an independent value of 17 digits. Sources
-and provenance stand beside each figure ("from memory" is said there).
+A published figure is tested twice: to the digits that its source prints, and to an independent value of 17 digits.
+Sources and provenance stand beside each ("from memory" is said there). The oracle's are printed nowhere: they are
+those of make_carrying_oracle.py.
 """
 
 from __future__ import annotations
@@ -19,11 +20,13 @@ from fourcount.stats.margins import margin_p
 from fourcount.stats.overall_risk import starting_risk_from_overall
 from fourcount.stats.propagation import Limits, Propagated, StartLimits, limits_of_counts, propagated
 from fourcount.stats.results import Counts, Gap, Interval
+from reference_command import reference_command
 
 FOLDER = Path(__file__).parent
 ENTRIES: dict[str, dict[str, Any]] = {
     entry["id"]: entry for entry in json.loads((FOLDER / "published_carrying.json").read_text("utf-8"))["entries"]
 }
+ORACLE: list[dict[str, Any]] = json.loads((FOLDER / "oracle_carrying.json").read_text("utf-8"))["entries"]
 PRINTED_LIMITS: dict[str, dict[str, Any]] = {
     entry["id"]: entry
     for entry in json.loads((FOLDER / "published.json").read_text("utf-8"))["entries"]
@@ -99,6 +102,30 @@ def test_figure_agrees_with_its_source(key: str) -> None:
     for name, figure in entry["figures"].items():
         assert values[name] == pytest.approx(float(figure["recomputed"]), rel=1e-10), name
         assert abs(values[name] - float(figure["printed"])) <= figure["tolerance"] * (1 + 1e-9), name
+
+
+@pytest.mark.parametrize(
+    "entry", ORACLE, ids=lambda entry: "-".join((entry["kind"], *map(str, entry["inputs"].values())))
+)
+def test_figure_agrees_with_fifty_digits(entry: dict[str, Any]) -> None:
+    """What no source prints is what the same formulas give at 50 digits, written a second time."""
+    values = GIVEN_BY[entry["kind"]]({name: _value(text) for name, text in entry["inputs"].items()})
+    assert set(values) == set(entry["figures"])
+    for name, figure in entry["figures"].items():
+        assert values[name] == pytest.approx(float(figure), rel=1e-10), name
+
+
+def _value(given: str | int) -> str | float:
+    """An input as ``stats`` takes it: a name, or a number that the oracle holds as a text of all its digits."""
+    try:
+        return float(given)
+    except ValueError:
+        return given
+
+
+def test_the_oracle_is_what_its_command_makes() -> None:
+    """No figure of it was typed."""
+    assert reference_command("make_carrying_oracle").entries() == ORACLE
 
 
 @pytest.mark.parametrize("key", PRINTED_LIMITS)

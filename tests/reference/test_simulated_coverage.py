@@ -2,27 +2,11 @@
 
 from __future__ import annotations
 
-import importlib.util
-import sys
-from pathlib import Path
-from types import ModuleType
-
 import pytest
 
+from reference_command import reference_command
 
-def _load() -> ModuleType:
-    """simulated_coverage.py beside this file, which is a command and no package."""
-    file = Path(__file__).parent / "simulated_coverage.py"
-    specification = importlib.util.spec_from_file_location("simulated_coverage", file)
-    assert specification is not None
-    assert specification.loader is not None
-    module = importlib.util.module_from_spec(specification)
-    sys.modules[specification.name] = module
-    specification.loader.exec_module(module)
-    return module
-
-
-simulated = _load()
+simulated = reference_command("simulated_coverage")
 
 DRAWS = 4000
 
