@@ -8,7 +8,7 @@ import pytest
 
 from fourcount.face.look import SIZES, ZOOMS
 from fourcount.face.window import MainWindow
-from fourcount.ink.palette import DARK, LIGHT, Palette
+from fourcount.ink.palette import DARK, HIGH_DARK, HIGH_LIGHT, LIGHT, Palette
 
 if TYPE_CHECKING:
     from conftest import Hands
@@ -100,7 +100,10 @@ def test_in_two_columns_the_patient_stands_under_the_print(example: Hands) -> No
     assert window.says.x() > window.printed.x()
 
 
-@pytest.mark.parametrize(("appearance", "palette"), [("dark", DARK), ("light", LIGHT)])
+@pytest.mark.parametrize(
+    ("appearance", "palette"),
+    [("dark", DARK), ("light", LIGHT), ("high-light", HIGH_LIGHT), ("high-dark", HIGH_DARK)],
+)
 def test_light_and_dark(example: Hands, appearance: str, palette: Palette) -> None:
     """The choice in the menu takes hold of page, text and picture at once."""
     window = example.window

@@ -7,11 +7,18 @@ import re
 import pytest
 from PySide6.QtGui import QColor
 
-from fourcount.ink.palette import DARK, LIGHT, PAPER, Palette, contrast, relative_luminance
+from fourcount.ink.palette import DARK, HIGH_DARK, HIGH_LIGHT, LIGHT, PAPER, Palette, contrast, relative_luminance
 
-PALETTES = [pytest.param(LIGHT, id="light"), pytest.param(DARK, id="dark"), pytest.param(PAPER, id="paper")]
+HIGH = [pytest.param(HIGH_LIGHT, id="high-light"), pytest.param(HIGH_DARK, id="high-dark")]
+PALETTES = [
+    pytest.param(LIGHT, id="light"),
+    pytest.param(DARK, id="dark"),
+    pytest.param(PAPER, id="paper"),
+    *HIGH,
+]
 TEXT = 4.5  # WCAG 2.2, success criterion 1.4.3
 GRAPHICS = 3.0  # WCAG 2.2, success criterion 1.4.11
+ENHANCED = 7.0  # WCAG 2.2, success criterion 1.4.6
 
 
 @pytest.mark.parametrize("palette", PALETTES)
@@ -40,6 +47,16 @@ def test_text_on_the_accent_can_be_read(palette: Palette) -> None:
 def test_graphics_can_be_seen(palette: Palette, part: str) -> None:
     """Edges of fields, icons, marks and strips have 3:1 on the page."""
     assert contrast(getattr(palette, part), palette.page) >= GRAPHICS
+
+
+@pytest.mark.parametrize("palette", HIGH)
+def test_high_contrast_is_higher(palette: Palette) -> None:
+    """Text has 7:1 wherever it stands, edges and marks have as much, and even a hairline can be seen."""
+    texts = [contrast(getattr(palette, part), palette.page) for part in ("ink", "muted", "accent", "caution")]
+    on_tint = [contrast(getattr(palette, part), palette.tint) for part in ("ink", "muted")]
+    assert min(texts + on_tint + [contrast(palette.on_accent, palette.accent)]) >= ENHANCED
+    assert contrast(palette.outline, palette.page) >= ENHANCED
+    assert contrast(palette.hairline, palette.page) >= GRAPHICS
 
 
 @pytest.mark.parametrize("palette", PALETTES)

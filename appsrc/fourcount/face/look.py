@@ -3,9 +3,9 @@
 from __future__ import annotations
 
 from PySide6.QtCore import QObject, Qt, Signal
-from PySide6.QtGui import QColor, QFont, QFontInfo, QGuiApplication, QPalette
+from PySide6.QtGui import QColor, QFont, QFontInfo, QGuiApplication, QPalette, QStyleHints
 
-from fourcount.ink.palette import DARK, LIGHT, Palette
+from fourcount.ink.palette import DARK, HIGH_DARK, HIGH_LIGHT, LIGHT, Palette
 from fourcount.ink.style import Role
 
 SIZES: dict[Role, int] = {
@@ -25,7 +25,7 @@ SEMIBOLD: tuple[Role, ...] = ("head", "estimate", "figure", "strong")
 ZOOMS = (0.8, 0.9, 1.0, 1.1, 1.25, 1.5, 1.75, 2.0)
 """The steps of the text size."""
 
-APPEARANCES = ("system", "light", "dark")
+APPEARANCES = ("system", "light", "dark", "high-light", "high-dark")
 
 
 class Look(QObject):
@@ -49,6 +49,8 @@ class Look(QObject):
             self.set_appearance(appearance)
         self._take_scheme()
         hints.colorSchemeChanged.connect(self._on_scheme_changed)
+        if hasattr(hints, "accessibility"):
+            hints.accessibility().contrastPreferenceChanged.connect(self._on_scheme_changed)
 
     def px(self, pixels: float) -> int:
         """A length that grows with the text, in logical pixels."""
@@ -111,10 +113,11 @@ class Look(QObject):
         self.set_zoom(ZOOMS[min(max(nearest + direction, 0), len(ZOOMS) - 1)])
 
     def set_appearance(self, appearance: str) -> None:
-        """Follow the system, or stay light or dark."""
+        """Follow the system, or stay light or dark, with the usual contrast or a higher one."""
         self.appearance = appearance
         scheme = {"light": Qt.ColorScheme.Light, "dark": Qt.ColorScheme.Dark}
-        QGuiApplication.styleHints().setColorScheme(scheme.get(appearance, Qt.ColorScheme.Unknown))
+        asked = scheme.get(appearance.removeprefix("high-"), Qt.ColorScheme.Unknown)
+        QGuiApplication.styleHints().setColorScheme(asked)
         self._on_scheme_changed()
 
     def _on_scheme_changed(self) -> None:
@@ -124,10 +127,19 @@ class Look(QObject):
             self.changed.emit()
 
     def _take_scheme(self) -> None:
-        system_is_dark = QGuiApplication.styleHints().colorScheme() == Qt.ColorScheme.Dark
-        dark = self.appearance == "dark" or (self.appearance == "system" and system_is_dark)
-        self.palette = DARK if dark else LIGHT
+        hints = QGuiApplication.styleHints()
+        system = self.appearance == "system"
+        dark = self.appearance.endswith("dark") or (system and hints.colorScheme() == Qt.ColorScheme.Dark)
+        high = self.appearance.startswith("high-") or (system and _wants_contrast(hints))
+        self.palette = (HIGH_DARK if dark else HIGH_LIGHT) if high else (DARK if dark else LIGHT)
         self._text_palettes.clear()
+
+
+def _wants_contrast(hints: QStyleHints) -> bool:
+    """Whether the system asks for a higher contrast; Qt knows from 6.10 on."""
+    if not hasattr(hints, "accessibility"):
+        return False
+    return bool(hints.accessibility().contrastPreference() == Qt.ContrastPreference.HighContrast)
 
 
 def family_in_use() -> str:

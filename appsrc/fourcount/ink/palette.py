@@ -1,4 +1,4 @@
-"""The colours, in light and in dark, by the part they play."""
+"""The colours, in light and in dark, each with a pair of higher contrast, by the part they play."""
 
 from __future__ import annotations
 
@@ -47,6 +47,31 @@ DARK = Palette(
     outline="#8B949D",
     on_accent="#171C21",
 )
+
+HIGH_LIGHT = Palette(
+    page="#FFFFFF",
+    ink="#000000",
+    muted="#2B2B2B",
+    hairline="#6B6B6B",
+    accent="#003A56",
+    tint="#DCEBF3",
+    caution="#6B3300",
+    outline="#333333",
+    on_accent="#FFFFFF",
+)
+
+HIGH_DARK = Palette(
+    page="#000000",
+    ink="#FFFFFF",
+    muted="#DADADA",
+    hairline="#8C8C8C",
+    accent="#8FDCF5",
+    tint="#0F303D",
+    caution="#FFC46B",
+    outline="#C8C8C8",
+    on_accent="#000000",
+)
+"""For those who need more than the usual contrast; hairlines can be seen there too."""
 
 PAPER = LIGHT._replace(page="#FFFFFF", ink="#12181F")
 """For pictures that leave the window: always dark on white."""

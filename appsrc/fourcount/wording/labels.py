@@ -171,7 +171,13 @@ COMMANDS |= {
     for number, (form, note) in enumerate(FORM_NOTES.items(), start=1)
 }
 
-APPEARANCES = {"system": "Light or dark: as the s&ystem", "light": "L&ight", "dark": "&Dark"}
+APPEARANCES = {
+    "system": "Light or dark: as the s&ystem",
+    "light": "L&ight",
+    "dark": "&Dark",
+    "high-light": "Li&ght, high contrast",
+    "high-dark": "Dar&k, high contrast",
+}
 
 LINK_NAMES = {"count-other": "Count the other outcome"}
 """What a link is called in full, where its words are short."""
