@@ -11,7 +11,6 @@ from fourcount.appraisal.findings import Gap, Interval
 from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
-from fourcount.wording import starts
 from fourcount.wording.basis import basis, range_note
 from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.patient import patient_words
@@ -201,20 +200,6 @@ def test_another_span_is_the_span_of_every_sentence():
     assert words.summary.startswith("over 5 years, ")
     assert " fell at least once within 5 years and " in words.picture_sentence
     assert "12 months" not in words.picture_sentence + words.summary + words.detail
-
-
-@pytest.mark.parametrize(
-    ("patient", "like"),
-    [
-        (carried("risk_ratio", RR, 0.12), False),
-        (carried("risk_ratio", RR, 0.171, **AT_OWN), True),
-        (carried("odds_ratio", OR, 0.171, adjusted=True, **AT_OWN), True),
-        (carried("risk_ratio", RR, 0.171, study_span=YEAR, other_span=FIVE_YEARS, **AT_OWN), False),
-    ],
-)
-def test_people_are_like_the_studys_at_its_own_risk_alone(patient, like):
-    """By whatever effect, within the study's own time."""
-    assert starts.like_the_study(patient) == like
 
 
 def test_the_adjusted_effect_beside_counts_keeps_its_level():

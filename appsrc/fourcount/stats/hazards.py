@@ -10,16 +10,11 @@ def risk_over(rate_per_year: float, years: float) -> float:
     return -math.expm1(-rate_per_year * years)
 
 
-def other_span(risk: float, years_from: float, years_to: float) -> float:
-    """A risk over one time span seen over another, the hazard being constant: 1 - (1 - risk)^(t2/t1).
+def over_spans(risk: float, spans: float) -> float:
+    """A risk over so many times its time span, the hazard being constant: 1 - (1 - risk)^spans.
 
     Nobody and everybody stay nobody and everybody. Common practice.
     """
-    return over_spans(risk, years_to / years_from)
-
-
-def over_spans(risk: float, spans: float) -> float:
-    """The same over so many times the span that the risk belongs to."""
     return 1.0 if risk == 1.0 else -math.expm1(math.log1p(-risk) * spans)
 
 

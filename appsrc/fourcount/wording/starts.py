@@ -19,18 +19,13 @@ FROM_OVERALL = "from an overall risk of {overall}, {share} having the exposure"
 
 
 def own(patient: PatientFindings) -> bool:
-    """Whether the patient starts at the study's own risk."""
+    """Whether the patient starts at the study's own risk, and so is like the people in the study, by any effect."""
     return patient.baseline_from == "reference"
 
 
 def as_in_the_study(patient: PatientFindings) -> bool:
     """Whether the patient's figures are the study's, so that all of them stand elsewhere already."""
     return own(patient) and patient.range_from == "table" and patient.other_span is None
-
-
-def like_the_study(patient: PatientFindings) -> bool:
-    """Whether these are people like those in the study: at its own starting risk, over its own time, by any effect."""
-    return own(patient) and patient.other_span is None
 
 
 def value(patient: PatientFindings) -> str:
