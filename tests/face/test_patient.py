@@ -5,6 +5,7 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 import pytest
+from PySide6.QtCore import Qt
 
 from fourcount.ink.picture import Picture
 from fourcount.wording.patient import WHICH_PEOPLE
@@ -111,6 +112,21 @@ def test_a_risk_over_100_percent_is_refused_and_the_odds_ratio_offered(hands: Ha
     effect = hands.window.patient.effect
     hands.choose(effect, effect.itemText(1))
     assert hands.window.patient.figures.picture.isVisible()
+
+
+def test_the_odds_ratio_is_one_step_away_where_a_risk_would_pass_100_percent(hands: Hands) -> None:
+    """The link carries the odds ratio, goes with its reason, and is undone as one step."""
+    hands.count("60", "40", "30", "70")
+    hands.write(hands.window.patient.baseline, "80%")
+    link, effect = hands.window.patient.figures.odds, hands.window.patient.effect
+    assert link.isVisible()
+    hands.qtbot.keyClick(link, Qt.Key.Key_Return)
+    assert hands.window.session.outcome.patient.effect == "odds_ratio"
+    assert not link.isVisible()
+    assert effect.hasFocus()
+    assert drawn(hands).plan.with_risk < 1
+    hands.window.session.undo()
+    assert link.isVisible()
 
 
 @pytest.mark.parametrize(

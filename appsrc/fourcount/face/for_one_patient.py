@@ -80,6 +80,7 @@ class ForOnePatient(FieldsView):
         self.names["starting_risk_text"].hide()
         self.figures = Figures(self._look, actions, menu)
         self.figures.hide()
+        self.figures.odds_wanted.connect(self._on_odds)
         rows = QVBoxLayout()
         self._column.insertLayout(2, rows)
         self.quiet = QuietRows(self._look, {"span": rows})
@@ -190,6 +191,10 @@ class ForOnePatient(FieldsView):
 
     def _on_effect(self, key: object) -> None:
         self.chosen.emit("effect", key)
+
+    def _on_odds(self) -> None:
+        self.effect.setFocus()  # the link goes with what it was for
+        self.chosen.emit("effect", "odds_ratio")
 
     def _on_kind(self, key: object) -> None:
         self.chosen.emit("start_kind", key)

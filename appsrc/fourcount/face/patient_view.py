@@ -43,6 +43,7 @@ class PatientView(NamedTuple):
     rows_corner: str = ""
     rows_sentence: str = ""
     to_curve: bool = False
+    to_odds: bool = False
 
 
 def patient_view(
@@ -105,8 +106,15 @@ def _with_patient(
         sentence=words.picture_sentence,
         summary=words.summary_bold,
         detail="\n".join(part for part in (detail, missing) if part),
+        to_odds=_passes(patient) and any(_key(one) == "odds_ratio" for one in findings.carriable),
         **_table(outcome, findings, patient, choices, people),
     )
+
+
+def _passes(patient: PatientFindings) -> bool:
+    """Whether the carried effect asks for more than 100%, at any of the starting risks."""
+    told = [one for one in (patient, patient.low, patient.high) if isinstance(one, PatientFindings)]
+    return any(one.with_.estimate == Gap("beyond-one") for one in told)
 
 
 def _table(

@@ -48,6 +48,9 @@ START_HINTS = {
 }
 USUAL_START = "Usual starting risk"
 
+CARRY_ODDS = "Carry the odds ratio"
+"""Offered where a risk would pass 100%: odds never do."""
+
 PICTURE_NAMES = {"picture": "Picture", "relative": "The relative figure as a picture"}
 
 QUIET = {

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QPoint
+from PySide6.QtCore import QPoint, Signal
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QMenu, QVBoxLayout, QWidget
 
@@ -15,7 +15,13 @@ from fourcount.face.look import Look
 from fourcount.face.patient.table import PatientTable
 from fourcount.face.picture_view import PictureView
 from fourcount.face.text import Words
-from fourcount.wording.patient_labels import BUTTONS, PICTURE_LINK_NAMES, PICTURE_LINKS, PICTURE_NAMES
+from fourcount.wording.patient_labels import (
+    BUTTONS,
+    CARRY_ODDS,
+    PICTURE_LINK_NAMES,
+    PICTURE_LINKS,
+    PICTURE_NAMES,
+)
 
 if TYPE_CHECKING:
     from fourcount.face.patient_view import PatientView
@@ -23,7 +29,13 @@ if TYPE_CHECKING:
 
 
 class Figures(QWidget):
-    """Picture, sentence, table, and the commands that lead to the patient's view, the page and the curve."""
+    """Picture, sentence, table, and the commands that lead to the patient's view, the page and the curve.
+
+    **Signals**
+        odds_wanted: the odds ratio is to be carried, since the effect in use would pass 100%.
+    """
+
+    odds_wanted = Signal()
 
     def __init__(self, look: Look, actions: dict[str, QAction], menu: QMenu) -> None:
         super().__init__()
@@ -34,6 +46,7 @@ class Figures(QWidget):
         self.relative = PictureView(look, PICTURE_NAMES["relative"])
         self.summary = Words(look, "strong", selectable=True)
         self.detail = Words(look, "body", "muted", selectable=True)
+        self.odds = Link(look, CARRY_ODDS)
         self.table = PatientTable(look)
         self.show_patient = Button(look, BUTTONS["show-patient"], actions["show-patient"], filled=True)
         self.handout = Button(look, BUTTONS["handout"], actions["handout"])
@@ -45,13 +58,14 @@ class Figures(QWidget):
         self._several = False
         self._build()
         self.draw.clicked.connect(self._on_draw)
+        self.odds.clicked.connect(self._on_odds)
         look.changed.connect(self._on_look_changed)
 
     @property
     def stops(self) -> tuple[QWidget, ...]:
         """What Tab stops at, in order."""
         links = (self.draw, self.copy, self.curve)
-        return (self.summary, self.detail, self.show_patient, self.handout, *links)
+        return (self.summary, self.detail, self.odds, self.show_patient, self.handout, *links)
 
     def show_view(self, view: PatientView) -> None:
         """Show the picture and all that goes with it."""
@@ -66,6 +80,7 @@ class Figures(QWidget):
         for link in (self.draw, self.copy, self.show_patient, self.handout):
             link.setVisible(there)
         self.curve.setVisible(view.to_curve)
+        self.odds.setVisible(view.to_odds)
         self._place_table(len(view.rows) > 1)
 
     def _build(self) -> None:
@@ -76,7 +91,7 @@ class Figures(QWidget):
             buttons.addWidget(button)
         self._column = QVBoxLayout(self)
         self._column.setContentsMargins(0, 0, 0, 0)
-        for widget in (self.picture, self.summary, self.detail, self.relative):
+        for widget in (self.picture, self.summary, self.detail, self.odds, self.relative):
             self._column.addWidget(widget)
         self._column.addLayout(buttons)
         self._column.addLayout(links)
@@ -89,6 +104,9 @@ class Figures(QWidget):
             self._several = several
             self._column.removeWidget(self.table)
             self._column.insertWidget(self._column.indexOf(self.detail) + 1 if several else -1, self.table)
+
+    def _on_odds(self) -> None:
+        self.odds_wanted.emit()
 
     def _on_draw(self) -> None:
         self._menu.popup(self.draw.mapToGlobal(QPoint(0, self.draw.height())))
