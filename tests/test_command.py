@@ -5,6 +5,7 @@ from __future__ import annotations
 import io
 import json
 import os
+import re
 import subprocess
 import sys
 from collections.abc import Mapping
@@ -16,7 +17,9 @@ import pytest
 from fourcount import __main__ as command
 from fourcount import __version__, answer
 from fourcount.publish.answer_file import file_json, file_listing
+from fourcount.publish.asked_patient import WISHES
 from fourcount.record.codec import encode
+from fourcount.wording.command import HELP
 from fourcount.wording.example import worked_example
 
 TRIAL = ["15", "85", "5", "95"]
@@ -115,6 +118,13 @@ def test_all_that_is_asked_for_a_patient(
     assert json.loads(capsys.readouterr().out) == answer(*map(int, TRIAL), **given)
     assert command.main(["answer", *TRIAL, *options]) == 0
     assert capsys.readouterr().out
+
+
+@pytest.mark.parametrize("name", WISHES)
+def test_every_option_of_a_patient_is_told(name: str) -> None:
+    """The help names it, and so does the function that takes it."""
+    assert re.search(rf"--{name.replace('_', '-')}\b", HELP)
+    assert re.search(rf"^    ([a-z_]+, )*{name}(, [a-z_]+)* :", str(answer.__doc__), re.MULTILINE)
 
 
 def test_why_nobody_is_carried_is_said(capsys: pytest.CaptureFixture[str]) -> None:

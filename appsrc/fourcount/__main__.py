@@ -21,11 +21,6 @@ if TYPE_CHECKING:
 
 COUNTS_NEEDED = 4
 GOOD, FAILED, MISTYPED = 0, 1, 2
-WISHES = (
-    "low", "high", "rate", "overall", "exposed", "effect", "span", "other_span", "adjusted", "margin", "matters",
-)  # fmt: skip
-"""The options of a patient and of a line of one's own beside the starting risk."""
-
 _MINUS_NUMBER = re.compile(r"-[0-9.,]")
 
 
@@ -125,6 +120,7 @@ def _printed(question: Question) -> str:
 def _question(wanted: Namespace) -> Question:
     """The counts and options as read; MistypedError with the sentence of whatever cannot be."""
     from fourcount.publish.answer import asked
+    from fourcount.publish.asked_patient import WISHES
 
     if len(wanted.counts) != COUNTS_NEEDED:
         raise MistypedError(words.FOUR_COUNTS.format(number=len(wanted.counts)))
@@ -134,7 +130,6 @@ def _question(wanted: Namespace) -> Question:
             design=wanted.design,
             level=_level(wanted.level),
             intervals=wanted.intervals,
-            baseline=wanted.baseline,
             unwelcome=not wanted.welcome,
             printed=wanted.printed,
             **{name: getattr(wanted, name) for name in WISHES},
@@ -180,6 +175,8 @@ def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
     """
     from argparse import ArgumentParser  # the window starts without it
 
+    from fourcount.publish.asked_patient import WISHES
+
     class Parser(ArgumentParser):
         """A parser whose complaints are exceptions, so that one place says them."""
 
@@ -193,7 +190,7 @@ def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
     parser.add_argument("--design", default="trial")
     parser.add_argument("--level", default="95")
     parser.add_argument("--intervals", default="score")
-    for option in ("baseline", "printed", *WISHES):
+    for option in ("printed", *WISHES):
         parser.add_argument(f"--{option.replace('_', '-')}")
     for switch in ("--welcome", "--json", "--version"):
         parser.add_argument(switch, action="store_true")

@@ -125,4 +125,4 @@ def _kind(question: Question, findings: OutcomeFindings) -> str:
     assert not isinstance(difference.estimate, Gap)
     if difference.estimate == 0:
         return "neither"
-    return "NNTB" if (difference.estimate < 0) == question.unwelcome else "NNTH"
+    return "NNTB" if (difference.estimate < 0) != question.outcome.welcome else "NNTH"

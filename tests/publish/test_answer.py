@@ -56,7 +56,7 @@ def test_a_baseline_is_a_fraction_or_a_text(baseline: Any) -> None:
 def test_a_fraction_reads_back_as_itself(baseline: float) -> None:
     """The text that stands for a fraction gives exactly that fraction."""
     question = asked(TRIAL, design="trial", level=0.95, intervals="score", baseline=baseline, unwelcome=True)
-    assert read_risk(question.baseline_text) == Proportion(value=baseline)
+    assert read_risk(question.outcome.patient.starting_risk_text) == Proportion(value=baseline)
 
 
 def test_whole_numbers_of_other_kinds_are_counts() -> None:

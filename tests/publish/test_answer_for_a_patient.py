@@ -11,10 +11,11 @@ from contract_checks import check_patient, withheld
 from contract_keys import LINE_KEYS, LINE_KEYS_OF_A_MARGIN
 from forms import EVERY_FORM
 from fourcount.appraisal.appraise import appraise
-from fourcount.publish.answer import answer
+from fourcount.publish.answer import answer, asked
 from fourcount.publish.answer_file import file_json, file_listing
 from fourcount.publish.contract import contract
-from fourcount.record.outcome import Outcome, Patient
+from fourcount.publish.listing import listing
+from fourcount.record.outcome import DESIGNS, Outcome, Patient
 from fourcount.record.paper import Choices, Record
 from fourcount.wording.example import worked_example
 
@@ -34,9 +35,15 @@ STARTS: dict[str, dict[str, Any]] = {
 }
 
 
-@pytest.mark.parametrize("design", ["trial", "cohort", "survey", "case-control", "matched", "paired", "before-after"])
-@pytest.mark.parametrize("start", STARTS)
-def test_every_start_in_every_design_keeps_to_the_structure(start: str, design: str) -> None:
+ODDS_ALONE = ("case-control", "matched")
+"""Designs that carry nothing but an odds ratio."""
+
+
+@pytest.mark.parametrize(
+    ("design", "start"),
+    [(d, s) for d in DESIGNS for s in STARTS if (d, s) not in {(odds, "difference") for odds in ODDS_ALONE}],
+)
+def test_every_start_in_every_design_keeps_to_the_structure(design: str, start: str) -> None:
     """Strict JSON, and the keys of a patient are there whichever way the risk is given."""
     published: Any = answer(*TABLE, design=design, **STARTS[start])
     assert json.loads(json.dumps(published, allow_nan=False)) == published
@@ -72,6 +79,54 @@ def test_what_was_given_comes_back() -> None:
 def test_without_a_wish_there_is_no_patient_and_no_line() -> None:
     """The study's own figures say it all."""
     assert not {"patient", "line"} & set(answer(*TABLE))
+
+
+@pytest.mark.parametrize("design", DESIGNS)
+@pytest.mark.parametrize("given", [{}, {"adjusted": "OR 1.8 (1.2 to 2.7)"}, STARTS["bare"]])
+def test_text_and_dictionary_have_the_same_patient(design: str, given: dict[str, Any]) -> None:
+    """Outside trials the usual effect is the paper's adjusted one, and then the figures are not the table's."""
+    plain = {"design": design, "level": 0.95, "intervals": "score", "baseline": None, "unwelcome": True}
+    question = asked(TABLE, **{**plain, **given})
+    findings = appraise(question.outcome, question.choices)
+    said = "For one patient" in listing(question.outcome, findings, question.choices)
+    assert ("patient" in contract(question.outcome, question.choices, findings)) == said
+
+
+def test_an_effect_that_is_asked_for_is_answered() -> None:
+    """At the study's own risk too, where every crude effect gives the table's figures."""
+    patient: Any = answer(*TABLE, effect="odds_ratio")["patient"]
+    assert (patient["effect"], patient["range_from"]) == ("odds_ratio", "table")
+
+
+@pytest.mark.parametrize(
+    ("given", "allowed"),
+    [
+        ({"effect": "hazard_ratio"}, "risk_ratio, odds_ratio, risk_difference"),
+        ({"effect": "adjusted", "design": "cohort"}, "risk_ratio, odds_ratio, risk_difference"),
+        ({"effect": "risk_ratio", "design": "case-control", "baseline": "12%"}, "odds_ratio"),
+        (
+            {"effect": "hazard_ratio", "design": "cohort", "adjusted": "HR 0.6 (0.4 to 0.9)"},
+            "adjusted, risk_ratio, odds_ratio, risk_difference",
+        ),
+    ],
+)
+def test_an_effect_that_is_not_there_is_refused(given: dict[str, Any], allowed: str) -> None:
+    """Another effect in its place would answer another question; the sentence lists what there is."""
+    with pytest.raises(ValueError, match=f"what can be carried is {allowed}.$"):
+        answer(*TABLE, **given)
+
+
+def test_where_nothing_can_be_carried_the_reason_stands() -> None:
+    """A table of nobody has no effect to choose among."""
+    found: Any = answer(0, 0, 0, 0, effect="odds_ratio")
+    assert withheld(found["patient"])
+
+
+@pytest.mark.parametrize("given", [{"low": "50%"}, {"high": "5%"}])
+def test_a_risk_on_the_wrong_side_of_the_studys_own_is_refused(given: dict[str, Any]) -> None:
+    """The usual one of three is the study's 17.1% where none is given."""
+    with pytest.raises(ValueError, match=r"^The (low|high) risk cannot be used: .*\.$"):
+        answer(*TABLE, **given)
 
 
 @pytest.mark.parametrize(

@@ -3,14 +3,14 @@
 from __future__ import annotations
 
 import operator
-import reprlib
-from dataclasses import dataclass, field, fields
+from dataclasses import dataclass
 from numbers import Real
 from typing import cast
 
 from fourcount.appraisal.appraise import appraise
-from fourcount.publish.asked_patient import Wishes, with_wishes
+from fourcount.publish.asked_patient import WISHES, Wishes, check_against_study, with_wishes
 from fourcount.publish.contract import contract
+from fourcount.publish.shown import shown
 from fourcount.record.entry.cell import LARGEST_COUNT
 from fourcount.record.outcome import (
     CELLS,
@@ -22,7 +22,7 @@ from fourcount.record.outcome import (
     Pairs,
     PaperMeasure,
 )
-from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices, Family
+from fourcount.record.paper import FAMILIES, HIGHEST_LEVEL, LOWEST_LEVEL, Choices
 from fourcount.wording import command as words
 
 COUNT_NAMES = ("index events", "index non-events", "reference events", "reference non-events")
@@ -33,38 +33,19 @@ ODDS_RATIO_DESIGNS: tuple[Design, ...] = ("case-control", "matched")
 
 @dataclass(frozen=True, kw_only=True, slots=True)
 class Question:
-    """Four counts of an unpaired table, or of pairs, checked, and what is asked of them."""
+    """Four counts of an unpaired table, or of pairs, checked, and what is asked of them.
+
+    ``outcome`` is what a reader would have typed: the index group first, the events left; pairs both first.
+    """
 
     counts: tuple[int, ...]
-    design: Design
-    level: float
-    intervals: Family
-    unwelcome: bool
-    printed_text: str = ""
-    wishes: Wishes = field(default_factory=Wishes)
+    outcome: Outcome
+    choices: Choices
 
     @property
-    def baseline_text(self) -> str:
-        """The starting risk as a reader would have typed it."""
-        return self.outcome.patient.starting_risk_text
-
-    @property
-    def outcome(self) -> Outcome:
-        """The outcome that a reader would have typed: the index group first, the events left; pairs both first."""
-        cells = dict(zip(CELLS, map(str, self.counts), strict=True))
-        measure: PaperMeasure = "odds_ratio" if self.design in ODDS_RATIO_DESIGNS else "risk_ratio"
-        plain = Outcome(
-            table=Pairs(**cells) if self.design in PAIRED_DESIGNS else EventsAndOthers(**cells),
-            design=self.design,
-            left_welcome=not self.unwelcome,
-            paper_measure=measure,
-            paper_text=self.printed_text,
-        )
-        return with_wishes(plain, self.wishes, shown)
-
-    @property
-    def choices(self) -> Choices:
-        return Choices(family=self.intervals, level=self.level)
+    def printed_text(self) -> str:
+        """What the paper prints as the result of these counts."""
+        return self.outcome.paper_text
 
 
 def answer(  # noqa: PLR0913 - four counts, and six choices by name
@@ -170,20 +151,27 @@ def asked(
         raise ValueError(words.NOT_A_TRUTH.format(given=shown(unwelcome)))
     if printed is not None and not isinstance(printed, str):
         raise ValueError(words.NOT_A_PRINT.format(given=shown(printed)))
-    unknown = wishes.keys() - {one.name for one in fields(Wishes)}
+    unknown = wishes.keys() - set(WISHES)
     if unknown:
         raise TypeError(words.NO_SUCH_ARGUMENT.format(name=min(unknown)))
-    question = Question(
-        counts=whole,
+    wanted, choices = Wishes(baseline=baseline, **wishes), Choices(family=intervals, level=_level(level))
+    plain = _typed(whole, design, unwelcome=unwelcome, printed_text=printed or "")
+    outcome = with_wishes(plain, wanted)
+    check_against_study(wanted, outcome, choices)
+    return Question(counts=whole, outcome=outcome, choices=choices)
+
+
+def _typed(counts: tuple[int, ...], design: Design, *, unwelcome: bool, printed_text: str) -> Outcome:
+    """The table as a reader would have typed it."""
+    cells = dict(zip(CELLS, map(str, counts), strict=True))
+    measure: PaperMeasure = "odds_ratio" if design in ODDS_RATIO_DESIGNS else "risk_ratio"
+    return Outcome(
+        table=Pairs(**cells) if design in PAIRED_DESIGNS else EventsAndOthers(**cells),
         design=design,
-        level=_level(level),
-        intervals=intervals,
-        unwelcome=unwelcome,
-        printed_text=printed or "",
-        wishes=Wishes(baseline=baseline, **wishes),
+        left_welcome=not unwelcome,
+        paper_measure=measure,
+        paper_text=printed_text,
     )
-    _ = question.outcome  # whatever is wished for is refused here and now
-    return question
 
 
 def _count(value: object, name: str) -> int:
@@ -202,10 +190,3 @@ def _level(level: object) -> float:
     if not usable or not LOWEST_LEVEL <= cast(float, level) <= HIGHEST_LEVEL:
         raise ValueError(words.NOT_A_LEVEL.format(low=f"{LOWEST_LEVEL:.2f}", high=HIGHEST_LEVEL, given=shown(level)))
     return float(cast(float, level))
-
-
-def shown(value: object) -> str:
-    """What was given, short enough for a sentence. Python refuses to write out a whole number of great length."""
-    if isinstance(value, int) and abs(value) > 10**40:
-        return words.HUGE if value > 0 else words.HUGE_BELOW_ZERO
-    return reprlib.repr(value)

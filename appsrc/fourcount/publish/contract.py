@@ -22,7 +22,7 @@ from fourcount.appraisal.findings import (
 )
 from fourcount.publish.contract_extras import extras_json
 from fourcount.publish.contract_figures import Json, figure_json, measure_json, pair_json, value_json, withheld_json
-from fourcount.publish.contract_patient import asked_of_a_patient, line_json, patient_json
+from fourcount.publish.contract_patient import line_json, patient_json, tells_of_a_patient
 from fourcount.publish.contract_strata import strata_json
 from fourcount.record.outcome import Form, Outcome
 from fourcount.record.paper import Choices
@@ -46,7 +46,7 @@ FROM_PRINT: tuple[Form, ...] = ("risk-at-time", "effect-only")
 
 def contract(outcome: Outcome, choices: Choices, findings: OutcomeFindings) -> Json:
     """All that one outcome says, every method and test included."""
-    given: Json = {"patient": patient_json(findings.patient)} if asked_of_a_patient(outcome) else {}
+    given: Json = {"patient": patient_json(findings.patient)} if tells_of_a_patient(outcome, findings.patient) else {}
     return {
         "format": FORMAT,
         "design": outcome.design,

@@ -7,13 +7,24 @@ from fourcount.publish.contract_figures import Json, figure_json, measure_json, 
 from fourcount.record.entry.digits import plain
 from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Outcome, Patient
+from fourcount.wording import starts
 
 
 def asked_of_a_patient(outcome: Outcome) -> bool:
-    """Whether anything was typed or chosen for a patient beside the kind of effect, which alone changes no risk."""
+    """Whether anything was typed or chosen for a patient."""
     patient = outcome.patient
     texts = (getattr(patient, name) for name in Patient.__struct_fields__ if name.endswith("_text"))
-    return patient.effect == "adjusted" or any(plain(text) for text in texts)
+    return patient.effect != "usual" or any(plain(text) for text in texts)
+
+
+def tells_of_a_patient(outcome: Outcome, patient: PatientFindings | Gap) -> bool:
+    """Whether a patient's figures, or why there are none, belong beside the table's.
+
+    They do where they were asked for, and where they are not the table's own: outside trials the usual effect is the
+    paper's adjusted one.
+    """
+    apart = isinstance(patient, PatientFindings) and not starts.as_in_the_study(patient)
+    return apart or asked_of_a_patient(outcome)
 
 
 def patient_json(patient: PatientFindings | Gap) -> Json:

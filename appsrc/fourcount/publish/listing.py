@@ -15,7 +15,7 @@ from fourcount.wording import labels, limits, starts
 from fourcount.wording.cautions import SAID_OF_THE_PATIENT, STANDING, caution_text
 from fourcount.wording.extras import extra_lines
 from fourcount.wording.form import lacking, shown_choices
-from fourcount.wording.gaps import why_no_patient
+from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines import MeasureLine, measure_lines
 from fourcount.wording.own_line import own_line_sentence
 from fourcount.wording.patient import patient_words
@@ -96,8 +96,7 @@ def _patient(outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> s
     """
     patient, head = findings.patient, labels.COLUMNS["patient"]
     if isinstance(patient, Gap):
-        why = why_no_patient(patient, findings.form, next(iter(findings.measures), ""))
-        return "\n".join([head, _wrapped(why, INDENT)]) if asked_of_a_patient(outcome) else ""
+        return "\n".join([head, _wrapped(gap_text(patient), INDENT)]) if asked_of_a_patient(outcome) else ""
     words = patient_words(outcome, findings, choices, None)
     ranks = tuple(_wrapped(line, INDENT) for line in words.ranks)
     if starts.as_in_the_study(patient):

@@ -64,9 +64,10 @@ NOT_A_TEXT = "The {name} must be a text such as '{example}', not {given}."
 ONE_START = "A starting risk, a rate and an overall risk exclude each other: give one of them."
 OVERALL_AND_SHARE = "An overall risk and the share of people exposed are needed together."
 ONE_LINE = "A margin and a difference that matters exclude each other: give one of them."
+NOT_CARRIED = "The effect cannot be {given} here; what can be carried is {allowed}."
 NO_SUCH_ARGUMENT = "answer() has no argument {name}"
 ONLY_JSON = "A file has choices of its own: only --json fits it, not {option}."
-WISHES = {
+FIELDS = {
     "starting_risk_text": "baseline",
     "low_risk_text": "low risk",
     "high_risk_text": "high risk",

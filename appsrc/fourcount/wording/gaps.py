@@ -74,7 +74,8 @@ GAP_TEXTS = {
     "effect-unreadable": "The printed effect cannot be read; “0.54 (0.37 to 0.78)” would do.",
     "effect-not-typed": "Type the printed effect with its limits, such as 0.54 (0.37 to 0.78).",
     "no-interval-printed": "The paper gives neither limits nor an exact p to rebuild them from.",
-    "carried-later": "This figure cannot be carried to one patient.",
+    "not-carried": "This figure cannot be carried to one patient.",
+    "rate-difference-not-carried": "A rate difference cannot be turned into a risk here.",
     "no-losses": "Nobody is said to be lost; type how many of each group were.",
     "losses-unreadable": "A number lost, or the ratio of risks among the lost, cannot be read.",
     "clusters-not-here": "Nothing here corrects this figure for clusters, so it is not given.",
@@ -128,11 +129,6 @@ GAP_TEXTS = {
     "formula-beyond-risks": "The bare formula’s limit parts the two risks farther than they can lie apart; "
     "the score intervals do not.",
 }
-NOT_CARRIED_EFFECTS = {
-    "rate_difference": "A rate difference cannot be turned into a risk here.",
-}
-"""What is said of a printed effect that no patient's risk follows from."""
-
 LIMIT_TEXTS = {
     "beyond-one": "The upper limit of the risk would pass 100%, so the interval is open there.",
     "carried-beyond-zero": "The lower limit of the risk would fall below 0%, so the interval is open there.",
@@ -149,11 +145,9 @@ def gap_text(gap: Gap) -> str:
     return told(GAP_TEXTS.get(gap.key, UNKNOWN_GAP), gap.facts)
 
 
-def why_no_patient(gap: Gap, form: Form, measure: str) -> str:
-    """Why nothing is carried to one patient; ``measure`` is that of a printed effect."""
-    if gap.key != "carried-later" or form != "effect-only":
-        return gap_text(gap)
-    return NOT_CARRIED_EFFECTS.get(measure, GAP_TEXTS[gap.key])
+def why_no_patient(gap: Gap, form: Form, measure: str) -> str:  # noqa: ARG001
+    """Why nothing is carried to one patient."""
+    return gap_text(gap)
 
 
 def limit_text(gap: Gap) -> str:

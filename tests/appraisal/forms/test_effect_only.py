@@ -150,7 +150,7 @@ def test_an_odds_ratio_is_carried_to_a_typed_starting_risk():
 
 def test_a_rate_difference_is_not_carried():
     """No risk follows from a difference of rates alone."""
-    assert Gap("carried-later") == found("rate difference -0.8 (-1.3 to -0.3)", baseline="20%").patient
+    assert Gap("rate-difference-not-carried") == found("rate difference -0.8 (-1.3 to -0.3)", baseline="20%").patient
 
 
 def test_a_survey_at_a_starting_risk_has_no_number_needed():

@@ -61,7 +61,7 @@ def marks_of(outcome: Outcome, reading: StartReading) -> tuple[Mark, ...]:
 
 def _patient(study: Study, one: Carriable | None, starts: Starts, spans: Spans | Gap) -> PatientFindings | Gap:
     if one is None:
-        return Gap("carried-later")
+        return study.nothing
     usual = _at(study, one, starts.usual, spans)
     if isinstance(usual, Gap) or (starts.low is None and starts.high is None):
         return usual

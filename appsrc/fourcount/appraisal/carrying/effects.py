@@ -27,15 +27,19 @@ def carriable_of(outcome: Outcome, crude: Iterable[Carriable], adjusted: ReadEff
     return (printed, *own) if outcome.design in ADJUSTED_FIRST else (*own, printed)
 
 
-def chosen(carriable: tuple[Carriable, ...], effect: Effect) -> Carriable | None:
-    """The effect that is asked for; the usual one where that is not there."""
-    first = carriable[0] if carriable else None
+def named(carriable: tuple[Carriable, ...], effect: Effect) -> Carriable | None:
+    """The effect of that name; None where it is not there."""
     if effect == "usual":
-        return first
+        return carriable[0] if carriable else None
     for one in carriable:
         if one.adjusted if effect == "adjusted" else one.effect == effect and not one.adjusted:
             return one
-    return first
+    return None
+
+
+def chosen(carriable: tuple[Carriable, ...], effect: Effect) -> Carriable | None:
+    """The effect that is asked for; the usual one where that is not there."""
+    return named(carriable, effect) or named(carriable, "usual")
 
 
 def of_print(printed: PrintedFigure, figure: Figure, outcome: Outcome, *, adjusted: bool) -> Carriable | None:

@@ -28,7 +28,7 @@ class Study(msgspec.Struct, frozen=True, kw_only=True):
     ``own`` is None where the form or the design has no risks of people; ``needs`` is then the key of the reason why a
     starting risk has to be typed. ``odds_ratio`` is the one that is seen as a risk ratio as well, ``no_conversion``
     why there is none. ``number_needed`` is the reason for which the patient has none, ``refused`` the one for which
-    nothing is carried at all, if any.
+    nothing is carried at all, if any, and ``nothing`` the one where no effect is carriable.
     """
 
     outcome: Outcome
@@ -37,5 +37,6 @@ class Study(msgspec.Struct, frozen=True, kw_only=True):
     needs: str = "effect-needs-baseline"
     odds_ratio: Carriable | None = None
     no_conversion: Gap = Gap("not-counts")
+    nothing: Gap = Gap("not-carried")
     number_needed: str | None = None
     refused: Gap | None = None

@@ -53,7 +53,8 @@ GAP_KEYS = (
     "effect-unreadable",  # the printed effect cannot be read
     "effect-not-typed",  # no printed effect yet
     "no-interval-printed",  # the printed effect has no limits, and no p to rebuild them from
-    "carried-later",  # this form's effect is not carried to a patient
+    "not-carried",  # nothing here says how a patient's risk would change
+    "rate-difference-not-carried",  # no risk follows from a difference of rates
     "no-losses",  # nobody is said to be lost
     "losses-unreadable",  # the number lost, or the ratio of risks among them, cannot be read
     "limits-not-printed",  # a risk without its limits: no interval of the difference

@@ -127,6 +127,7 @@ def _study(printed: PrintedFigure, figure: Figure, outcome: Outcome) -> Study:
         carriable=() if one is None else (one,),
         needs="difference-needs-baseline" if printed.measure == "risk_difference" else "effect-needs-baseline",
         odds_ratio=one if one is not None and one.effect == "odds_ratio" else None,
+        nothing=Gap("rate-difference-not-carried" if printed.measure == "rate_difference" else "not-carried"),
         number_needed="design-before-after" if outcome.design == "before-after" else needed,
         refused=Gap("events-not-people") if counted_events else None,
     )
