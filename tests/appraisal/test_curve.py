@@ -11,7 +11,7 @@ from hypothesis import strategies as st
 
 from drawn_forms import outcomes
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.curve import curve
+from fourcount.appraisal.curve import curve, highest_start
 from fourcount.appraisal.findings import Carriable, Figure, Gap, Interval, OutcomeFindings
 from fourcount.appraisal.findings.curve import Curve, CurveLine, CurvePoint
 from fourcount.record.paper import Choices
@@ -44,7 +44,7 @@ def test_every_effect_passes_through_the_study(appraised: Callable[..., OutcomeF
 def test_an_odds_ratio_is_the_risk_ratio_that_was_published(appraised: Callable[..., OutcomeFindings]) -> None:
     """RR = OR / (1 - P0 + P0 OR): an odds ratio of 2.5 at 50% is 1.43 (Zhang and Yu 1998's formula, by hand)."""
     findings = carrying(appraised(38, 374, 70, 339, baseline="50%"), "odds_ratio", 2.5, 1.5, 4.0)
-    drawn = curve(findings, whole=True)
+    drawn = curve(findings)
     (ratio,) = drawn.ratios
     point = at(ratio, 0.5)
     assert [point.value, point.low, point.high] == pytest.approx([2.5 / 1.75, 1.5 / 1.25, 4 / 2.5])
@@ -54,7 +54,7 @@ def test_an_odds_ratio_is_the_risk_ratio_that_was_published(appraised: Callable[
 
 def test_risk_with_and_risk_ratio_are_two_views_of_one(appraised: Callable[..., OutcomeFindings]) -> None:
     """The odds ratio's risk with is its risk ratio times the starting risk, everywhere."""
-    drawn = curve(appraised(60, 140, 22, 178), whole=True)
+    drawn = curve(appraised(60, 140, 22, 178))
     risks, (ratios,) = lines(drawn)["odds_ratio"], drawn.ratios
     for risk, ratio in zip(risks.points, ratios.points, strict=True):
         assert risk.start == ratio.start
@@ -64,7 +64,7 @@ def test_risk_with_and_risk_ratio_are_two_views_of_one(appraised: Callable[..., 
 def test_a_line_ends_where_it_reaches_100(appraised: Callable[..., OutcomeFindings]) -> None:
     """A risk ratio of 2.5 reaches 100% at 40%; beyond that there is a gap, and below the end no value above 1."""
     findings = carrying(appraised(38, 374, 70, 339), "risk_ratio", 2.5, 2.0, 4.0)
-    (line,) = curve(findings, whole=True).lines
+    (line,) = curve(findings).lines
     assert (line.first, line.last) == (0.0, 0.4)
     assert at(line, 0.4).value == pytest.approx(1.0)
     assert at(line, 0.25).high == pytest.approx(1.0)
@@ -77,7 +77,7 @@ def test_a_line_ends_where_it_reaches_100(appraised: Callable[..., OutcomeFindin
 def test_a_difference_begins_where_it_leaves_nobody(appraised: Callable[..., OutcomeFindings]) -> None:
     """Ten fewer in 100 give no risk below a starting risk of 10%, and no limit is cut there either."""
     findings = carrying(appraised(38, 374, 70, 339), "risk_difference", -0.1, -0.2, 0.05)
-    (line,) = curve(findings, whole=True).lines
+    (line,) = curve(findings).lines
     assert (line.first, line.last) == (0.1, 1.0)
     assert at(line, 0.1).value == 0.0
     below = [point for point in line.points if point.start < 0.1]
@@ -114,12 +114,20 @@ def test_a_case_control_study_has_no_point_of_its_own(appraised: Callable[..., O
     assert set(lines(drawn)) == {"odds_ratio"}
 
 
-@pytest.mark.parametrize(("baseline", "reach"), [("2%", 0.5), ("12%", 0.5), ("30%", 1.0), ("100%", 1.0)])
-def test_the_axis_holds_twice_every_point(
-    appraised: Callable[..., OutcomeFindings], baseline: str, reach: float
+@pytest.mark.parametrize(("baseline", "highest"), [("2%", 70 / 409), ("12%", 70 / 409), ("30%", 0.3), ("100%", 1.0)])
+def test_the_highest_start_is_the_studys_or_the_patients(
+    appraised: Callable[..., OutcomeFindings], baseline: str, highest: float
 ) -> None:
-    """It goes to a round risk of at least twice the study's 17.1% and the patient's own."""
-    assert curve(appraised(38, 374, 70, 339, baseline=baseline)).reach == pytest.approx(reach)
+    """An axis that holds it holds every point."""
+    assert highest_start(appraised(38, 374, 70, 339, baseline=baseline)) == pytest.approx(highest)
+
+
+@pytest.mark.parametrize("reach", [0.2, 0.4, 1.0])
+def test_lines_run_as_far_as_they_are_asked_for(appraised: Callable[..., OutcomeFindings], reach: float) -> None:
+    """From nobody to the end of the axis."""
+    drawn = curve(appraised(38, 374, 70, 339), reach)
+    assert drawn.reach == reach
+    assert all((line.points[0].start, line.points[-1].start) == (0.0, reach) for line in drawn.lines)
 
 
 def test_an_effect_without_end_has_no_line(appraised: Callable[..., OutcomeFindings]) -> None:
@@ -136,10 +144,10 @@ def test_nothing_typed_draws_nothing(appraised: Callable[..., OutcomeFindings]) 
     assert (drawn.lines, drawn.ratios, drawn.marks) == ((), (), ())
 
 
-@given(outcomes(), st.booleans())
-def test_whatever_is_typed_no_risk_leaves_its_bounds(outcome: object, whole: bool) -> None:
+@given(outcomes(), st.sampled_from((0.02, 0.5, 1.0)))
+def test_whatever_is_typed_no_risk_leaves_its_bounds(outcome: object, reach: float) -> None:
     """Every value is a risk from 0 to 1 or a gap, the estimate lies between its limits, and points are in order."""
-    drawn = curve(appraise(outcome, Choices()), whole=whole)  # type: ignore[arg-type]
+    drawn = curve(appraise(outcome, Choices()), reach)  # type: ignore[arg-type]
     for line in drawn.lines:
         starts = [point.start for point in line.points]
         assert starts == sorted(set(starts))

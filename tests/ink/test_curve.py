@@ -14,12 +14,13 @@ from PySide6.QtCore import QStandardPaths
 from PySide6.QtGui import QImage
 
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.curve import curve
+from fourcount.appraisal.curve import curve, highest_start
 from fourcount.appraisal.findings import Gap
 from fourcount.ink import curve as pen_of_curve
 from fourcount.ink.curve import Format, draw_curve
 from fourcount.ink.curve_layout import CurveLayout, Sheet, dash_of
 from fourcount.ink.palette import DARK, LIGHT, PAPER, contrast
+from fourcount.picture.curve_axes import reach_for
 from fourcount.record.outcome import Outcome, Patient
 from fourcount.record.paper import Choices, Record
 from fourcount.wording.curve import View, curve_words, shown_lines, views
@@ -68,7 +69,7 @@ class Notes:
 
 def parts(outcome: Outcome, place: int = 0, *, whole: bool = False):
     findings = appraise(outcome, Choices())
-    drawn = curve(findings, whole=whole)
+    drawn = curve(findings, 1.0 if whole else reach_for(highest_start(findings)))
     view = views(outcome, drawn)[place][0]
     return drawn, view, curve_words(Record(outcomes=(outcome,)), outcome, findings, drawn, view)
 

@@ -8,7 +8,7 @@ import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
-from fourcount.picture.curve_axes import apart, even_marks, ratio_ends, ratio_marks, top_of
+from fourcount.picture.curve_axes import apart, even_marks, ratio_ends, ratio_marks, reach_for, top_of
 
 
 @pytest.mark.parametrize(
@@ -38,6 +38,15 @@ def test_marks_stay_on_the_axis_and_are_few(reach: float, most: int) -> None:
 def test_the_top_holds_the_highest_value(highest: float) -> None:
     """The axis ends at a round value above the highest one, never above 100%."""
     assert highest * (1 - 1e-9) <= top_of(highest) <= min(1.0, 2.01 * highest)
+
+
+@pytest.mark.parametrize(
+    ("highest", "reach"),
+    [(0.0, 1.0), (0.001, 0.002), (0.12, 0.3), (70 / 409, 0.4), (0.51, 1.0), (1.0, 1.0)],
+)
+def test_an_axis_of_starting_risks_holds_twice_the_highest(highest: float, reach: float) -> None:
+    """So that what is marked stands in its nearer half; 100% at most, and all of it where nothing is marked."""
+    assert reach_for(highest) == pytest.approx(reach)
 
 
 def test_nothing_but_zeros_has_the_whole_axis() -> None:

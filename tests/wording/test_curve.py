@@ -13,8 +13,10 @@ from hypothesis import strategies as st
 from drawn_forms import outcomes
 from forms import effect_only, strata
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.curve import curve
-from fourcount.picture.curve_axes import even_marks
+from fourcount.appraisal.curve import curve, highest_start
+from fourcount.appraisal.findings import OutcomeFindings
+from fourcount.appraisal.findings.curve import Curve
+from fourcount.picture.curve_axes import even_marks, reach_for
 from fourcount.record.outcome import Outcome, Patient
 from fourcount.record.paper import Choices, Record
 from fourcount.wording.curve import (
@@ -36,16 +38,21 @@ BANNED = re.compile(
 )
 
 
+def drawn_of(findings: OutcomeFindings, *, whole: bool = False) -> Curve:
+    """The curve as its window asks for it."""
+    return curve(findings, 1.0 if whole else reach_for(highest_start(findings)))
+
+
 def said(outcome: Outcome, view: View | None = None, *, whole: bool = False) -> CurveWords:
     """The words of an outcome's curve, in the view that comes first unless told otherwise."""
     findings = appraise(outcome, Choices())
-    drawn = curve(findings, whole=whole)
+    drawn = drawn_of(findings, whole=whole)
     shown = view or views(outcome, drawn)[0][0]
     return curve_words(Record(outcomes=(outcome,)), outcome, findings, drawn, shown)
 
 
 def table(outcome: Outcome, view: View | None = None, *, whole: bool = False) -> dict[str, tuple[str, ...]]:
-    drawn = curve(appraise(outcome, Choices()), whole=whole)
+    drawn = drawn_of(appraise(outcome, Choices()), whole=whole)
     rows = curve_rows(drawn, view or views(outcome, drawn)[0][0], even_marks(drawn.reach))
     return {row.start: row.cells for row in rows}
 
@@ -130,7 +137,7 @@ def test_the_odds_ratio_is_said_as_a_risk_ratio(at_12: Outcome) -> None:
 def test_views_begin_with_the_effect_that_is_carried(at_12: Outcome) -> None:
     """What the patient is told comes first; odds ratios as risk ratios come last."""
     outcome = msgspec.structs.replace(at_12, patient=Patient(starting_risk_text="12%", effect="odds_ratio"))
-    drawn = curve(appraise(outcome, Choices()))
+    drawn = drawn_of(appraise(outcome, Choices()))
     assert [text for _, text in views(outcome, drawn)] == [
         "Risk with: odds ratio and its interval",
         "Risk with: risk ratio and its interval",
@@ -142,14 +149,14 @@ def test_views_begin_with_the_effect_that_is_carried(at_12: Outcome) -> None:
 def test_the_table_holds_the_points_among_round_risks(at_12: Outcome) -> None:
     """A row for each round starting risk, the study's and the patient's; what cannot be says so."""
     rows = table(at_12)
-    assert list(rows) == ["0%", "10%", "12% (this patient)", "17.1% (the study)", "20%", "30%", "40%", "50%"]
+    assert list(rows) == ["0%", "10%", "12% (this patient)", "17.1% (the study)", "20%", "30%", "40%"]
     assert rows["12% (this patient)"][0] == "6.5% (4.5 to 9.3%)"
     assert rows["0%"][2] == "below 0%"
 
 
 def test_the_table_of_ratios_has_one_column(at_12: Outcome) -> None:
     """The odds ratio as a risk ratio, with both limits."""
-    drawn = curve(appraise(at_12, Choices()))
+    drawn = drawn_of(appraise(at_12, Choices()))
     assert curve_head(at_12, drawn, View(ratios=True)) == CurveRow(
         "Starting risk", ("Odds ratio 0.49 as a risk ratio",)
     )
@@ -185,7 +192,7 @@ def test_nothing_to_carry_is_said() -> None:
     """An empty table says in one sentence that there is nothing to draw."""
     outcome = Outcome()
     findings = appraise(outcome, Choices())
-    drawn = curve(findings)
+    drawn = drawn_of(findings)
     assert views(outcome, drawn) == []
     assert curve_words(Record(), outcome, findings, drawn, View()).notes == (NOTHING,)
     assert curve_rows(drawn, View(), (0.0, 1.0)) == []
@@ -196,7 +203,7 @@ def test_nothing_to_carry_is_said() -> None:
 def test_every_text_exists_whatever_is_typed(outcome: Outcome, whole: bool) -> None:
     """No exception, no raw value, no verdict in any view."""
     findings = appraise(outcome, Choices())
-    drawn = curve(findings, whole=whole)
+    drawn = drawn_of(findings, whole=whole)
     plain = msgspec.structs.replace(outcome, first_label_text="", adjusted_for_text="")
     for view, name in views(plain, drawn):
         words = curve_words(Record(), plain, findings, drawn, view)

@@ -12,20 +12,18 @@ from fourcount.stats.conversion import risk_ratio_from_odds_ratio, risk_with
 STEPS = 120
 SAME = 1e-9
 STUDY_RISKS = (("risk_reference", "risk_index"), ("pair_risk_reference", "pair_risk_index"))
-SETS = (1.0, 2.0, 5.0)
 
 Value = Callable[[float, float], float | Gap]
 """What an effect's value comes to at a starting risk."""
 
 
-def curve(findings: OutcomeFindings, *, whole: bool = False) -> Curve:
-    """The lines of all effects that can be carried, up to twice the highest risk in question or, ``whole``, to 100%.
+def curve(findings: OutcomeFindings, reach: float = 1.0) -> Curve:
+    """The lines of all effects that can be carried, for starting risks from 0 up to ``reach``.
 
     Bands are the effect's own limits at each starting risk, which is taken as certain there. Nothing is cut: a line
     ends where its risk reaches 100%, or 0. Sources: Cochrane Handbook 15.4.4; Zhang and Yu 1998, JAMA 280:1690.
     """
     marks = _marks(findings)
-    reach = 1.0 if whole or not marks else _reach(max(mark.without for mark in marks))
     drawn = [(one, line) for one in findings.carriable if (line := _risks(one, reach, marks)) is not None]
     return Curve(
         lines=tuple(line for _, line in drawn),
@@ -37,14 +35,9 @@ def curve(findings: OutcomeFindings, *, whole: bool = False) -> Curve:
     )
 
 
-def _reach(risk: float) -> float:
-    """The first of 1, 2, 5, 10... per cent and so on that is at least twice a risk; 100% at most."""
-    twice = 2 * risk
-    if twice <= 0:
-        return 1.0
-    decade = 10.0 ** math.floor(math.log10(twice))
-    wide = next((step * decade for step in SETS if step * decade >= twice * (1 - SAME)), 10 * decade)
-    return min(wide, 1.0)
+def highest_start(findings: OutcomeFindings) -> float:
+    """The highest starting risk that is marked, the study's or the patient's; 0 where none is."""
+    return max((mark.without for mark in _marks(findings)), default=0.0)
 
 
 def _risks(one: Carriable, reach: float, marks: tuple[CurveMark, ...]) -> CurveLine | None:

@@ -10,7 +10,7 @@ from PySide6.QtCore import QSize, Qt, QTimer
 from PySide6.QtGui import QAction, QGuiApplication, QImage, QKeySequence, QShowEvent
 from PySide6.QtWidgets import QDialog, QScrollArea, QVBoxLayout, QWidget
 
-from fourcount.appraisal.curve import curve
+from fourcount.appraisal.curve import curve, highest_start
 from fourcount.appraisal.findings.curve import Curve
 from fourcount.face import curve_file
 from fourcount.face.buttons import Button
@@ -25,7 +25,7 @@ from fourcount.face.text import Words
 from fourcount.ink.curve import draw_curve
 from fourcount.ink.curve_layout import Sheet
 from fourcount.ink.palette import PAPER, Palette
-from fourcount.picture.curve_axes import even_marks
+from fourcount.picture.curve_axes import even_marks, reach_for
 from fourcount.wording import curve_labels as labels
 from fourcount.wording.curve import CurveWords, View, curve_head, curve_rows, curve_words, views
 
@@ -165,7 +165,7 @@ class CurveWindow(QDialog):
         findings, outcome = self._session.findings, self._session.outcome
         if findings is None:
             return
-        found = curve(findings, whole=self._whole)
+        found = curve(findings, 1.0 if self._whole else reach_for(highest_start(findings)))
         offered = [(_key(found, view), view, text) for view, text in views(outcome, found)]
         self._views = {key: view for key, view, _ in offered}
         self.view.show_choices([(key, text) for key, _, text in offered])

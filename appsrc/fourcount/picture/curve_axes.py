@@ -7,6 +7,9 @@ from collections.abc import Sequence
 
 STEPS = (1.0, 2.0, 2.5, 5.0, 10.0)
 ROUNDING = 1e-9
+SIZES = (1.0, 1.5, 2.0, 3.0, 4.0, 5.0, 6.0, 8.0, 10.0)
+"""Where an axis of risks may end, times a power of ten."""
+
 RATIO_MARKS = (1.0, 1.5, 2.0, 3.0, 5.0, 7.0)
 """Between two powers of ten, where a ratio's axis may have a mark."""
 
@@ -24,8 +27,12 @@ def top_of(highest: float) -> float:
     if highest <= 0.0:
         return 1.0
     decade = 10.0 ** math.floor(math.log10(highest))
-    sizes = (1.0, 1.5, 2.0, 3.0, 4.0, 5.0, 6.0, 8.0, 10.0)
-    return min(1.0, next(size * decade for size in sizes if size * decade >= highest * (1 - ROUNDING)))
+    return min(1.0, next(size * decade for size in SIZES if size * decade >= highest * (1 - ROUNDING)))
+
+
+def reach_for(highest: float) -> float:
+    """How far an axis of starting risks runs: the first round value that is at least twice the highest one marked."""
+    return top_of(2 * highest)
 
 
 def ratio_marks(low: float, high: float, most: int = 7) -> tuple[float, ...]:
