@@ -180,7 +180,7 @@ def test_a_kind_of_file_that_there_is_not_is_one_sentence(
 ) -> None:
     """Another suffix is refused, and no file is made."""
     _, handout = opened()
-    assert save_as(handout, tmp_path / "page.doc").startswith("A page can be saved as .pdf, .png or .svg")
+    assert save_as(handout, tmp_path / "page.doc").startswith("The page can be saved as .pdf, .png or .svg")
     assert list(tmp_path.glob("page.*")) == []
 
 
@@ -285,7 +285,7 @@ def test_the_command_writes_the_page(record_file: Path, tmp_path: Path, paper: s
         ((), "A file is needed"),
         (("FILE",), "Say where the page goes with -o"),
         (("FILE", "-o"), "-o needs a value"),
-        (("FILE", "-o", "x.doc"), "A page can be saved as .pdf, .png or .svg"),
+        (("FILE", "-o", "x.doc"), "The page can be saved as .pdf, .png or .svg"),
         (("FILE", "-o", "x.pdf", "--paper", "a3"), "The paper must be a4 or letter"),
         (("FILE", "--fast", "-o", "x.pdf"), "There is no option"),
         (("FILE", "FILE", "-o", "x.pdf"), "One file at a time"),

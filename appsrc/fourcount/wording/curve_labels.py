@@ -2,6 +2,13 @@
 
 from __future__ import annotations
 
+from fourcount.wording.file_labels import CLOSE, SAVE, file_labels
+
+__all__ = [
+    "CLOSE", "COPIED", "COPY", "COPY_NAME", "DRAWING", "FILE_NAME", "FILTERS", "HIDE_NUMBERS", "NEAR", "NOT_SAVED",
+    "SAVE", "SAVED", "SAVE_TITLE", "SHOW_NUMBERS", "TABLE_NAME", "UNKNOWN_SUFFIX", "VIEW_NAME", "WHOLE", "WINDOW_TITLE",
+]  # fmt: skip
+
 WINDOW_TITLE = "Across starting risks"
 VIEW_NAME = "What is drawn"
 WHOLE = "Show all, 0 to 100%"
@@ -10,12 +17,8 @@ SHOW_NUMBERS = "Show the numbers"
 HIDE_NUMBERS = "Hide the numbers"
 TABLE_NAME = "The same numbers as a table"
 DRAWING = "Drawing…"
-SAVE, COPY, CLOSE = "Save as…", "Copy", "Close"
+COPY = "Copy"
 COPY_NAME = "Copy the curve"
 COPIED = "The curve is copied, with what has to be kept in mind."
-SAVE_TITLE = "Save the curve"
-SAVED = "The curve is saved as {name}."
-NOT_SAVED = "The curve could not be saved in {folder}: {reason}."
-UNKNOWN_SUFFIX = "The curve can be saved as .png, .svg or .pdf; {name} ends in none of these."
-FILTERS = {".png": "Picture (*.png)", ".svg": "Drawing (*.svg)", ".pdf": "PDF (*.pdf)"}
+SAVE_TITLE, SAVED, NOT_SAVED, UNKNOWN_SUFFIX, FILTERS = file_labels("the curve", ".png", ".svg", ".pdf")
 FILE_NAME = "curve"

@@ -2,6 +2,14 @@
 
 from __future__ import annotations
 
+from fourcount.wording.file_labels import CLOSE, SAVE, file_labels
+
+__all__ = [
+    "CANNOT_SHOW", "CLOSE", "FILTERS", "NOT_PRINTED", "NOT_READY", "NOT_SAVED", "NO_FILE", "NO_OUT", "NO_VALUE",
+    "ONE_FILE", "OUTCOMES_NAME", "PAPERS", "PAPER_NAME", "PAPER_PREFIX", "PREVIEW_NAME", "PRINT", "PRINTED", "SAVE",
+    "SAVED", "SAVE_TITLE", "UNKNOWN_OPTION", "UNKNOWN_PAPER", "UNKNOWN_SUFFIX", "UNNAMED", "WINDOW_TITLE",
+]  # fmt: skip
+
 WINDOW_TITLE = "Handout"
 PAPERS = {"a4": "A4", "letter": "Letter"}
 PAPER_NAME = "Paper"
@@ -10,14 +18,10 @@ OUTCOMES_NAME = "On the page"
 PREVIEW_NAME = "The page as it will be printed"
 NOT_READY = "{name}: {why}"
 UNNAMED = "Outcome {number}"
-SAVE, PRINT, CLOSE = "Save as…", "Print…", "Close"
-SAVE_TITLE = "Save the page"
-SAVED = "The page is saved as {name}."
+PRINT = "Print…"
+SAVE_TITLE, SAVED, NOT_SAVED, UNKNOWN_SUFFIX, FILTERS = file_labels("the page", ".pdf", ".png", ".svg")
 PRINTED = "The page is on its way to the printer."
 NOT_PRINTED = "The printer did not take the page."
-NOT_SAVED = "The page could not be saved in {folder}: {reason}."
-UNKNOWN_SUFFIX = "A page can be saved as .pdf, .png or .svg; {name} ends in none of these."
-FILTERS = {".pdf": "PDF (*.pdf)", ".png": "Picture (*.png)", ".svg": "Drawing (*.svg)"}
 
 NO_FILE = "A file is needed after 'handout': fourcount handout FILE -o OUT."
 NO_OUT = "Say where the page goes with -o, such as -o page.pdf."
