@@ -53,10 +53,10 @@ def _against(
     outcome: Outcome, value: float, measures: Measures, counts: FractionalCounts | None, level: float
 ) -> OwnLine | Gap:
     key = next((key for key in MEASURES_OF[outcome.line_scale] if key in measures), None)
-    figure = Gap("line-scale-not-here") if key is None else measures[key]
-    if key is None or isinstance(figure, Gap):
-        return figure if isinstance(figure, Gap) else Gap("line-scale-not-here")
-    if not isinstance(figure, Figure):
+    figure = None if key is None else measures[key]
+    if isinstance(figure, Gap):
+        return figure
+    if key is None or not isinstance(figure, Figure):
         return Gap("line-scale-not-here")
     lies = where_it_lies(figure.interval, value, outcome.line_side)
     if isinstance(lies, Gap):

@@ -39,7 +39,7 @@ def _ranked(
 def _rows(patient: PatientFindings, outcome: Outcome, findings: OutcomeFindings, choices: Choices) -> tuple[Row, ...]:
     shown, patient = patient_choices(findings, choices), starts.at_one_level(patient, choices)
     start, names, needed = starts.named(patient), exports.PATIENT_ROWS, patient.number_needed
-    key, form = _key_of(patient, findings), findings.form
+    key, form = patient.measure, findings.form
 
     def named(name: str) -> str:
         return exports.PATIENT.format(column=labels.COLUMNS["patient"], baseline=start, name=name)
@@ -55,10 +55,3 @@ def _rows(patient: PatientFindings, outcome: Outcome, findings: OutcomeFindings,
         measure_row(named(limits.needed_kind(needed)), needed, key, form),
         figure_row(named(names["risk_ratio"]), patient.risk_ratio, key, form),
     )
-
-
-def _key_of(patient: PatientFindings, findings: OutcomeFindings) -> str:
-    """Under which key an effect's method stands: strata are carried pooled."""
-    if patient.measure:
-        return patient.measure
-    return f"pooled_{patient.effect}" if findings.form == "strata" else patient.effect

@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import Carriable, CarriedEffect, Figure, Gap, PatientFindings
-from fourcount.record.outcome import EffectOnly, Outcome, Strata
+from fourcount.record.outcome import Outcome
 from fourcount.wording import limits, names
 from fourcount.wording.lines.as_printed import carried_texts
 
@@ -58,8 +58,7 @@ def _texts(outcome: Outcome, effect: CarriedEffect, figure: Figure, *, adjusted:
 def _name(outcome: Outcome, effect: CarriedEffect, measure: str, *, adjusted: bool) -> str:
     """Which of several effects it is: the pooled one of strata, that of pairs, the adjusted one of a print."""
     name = names.effect_name(outcome, effect)
-    if adjusted or (isinstance(outcome.table, EffectOnly) and outcome.adjusted_for_text.strip()):
+    if adjusted:
         return ADJUSTED.format(name=name)
-    key = measure or ("pooled_" if isinstance(outcome.table, Strata) else "")
-    form = next((form for begins, form in OF_MEASURES.items() if key.startswith(begins)), "{name}")
+    form = next((form for begins, form in OF_MEASURES.items() if measure.startswith(begins)), "{name}")
     return form.format(name=name)

@@ -10,7 +10,7 @@ from fourcount.record.paper import Choices, Record
 from fourcount.wording import carried, limits, names, numbers, spans, starts
 from fourcount.wording.basis import OWN_RANGE, basis, range_note
 from fourcount.wording.form import patient_choices
-from fourcount.wording.gaps import why_no_patient
+from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import DO_NOT_ADD_UP
 from fourcount.wording.picture_sentence import WHICH_PEOPLE, picture_sentence
 from fourcount.wording.ranks import people_for_all, rank_lines
@@ -52,7 +52,7 @@ def patient_words(
     patient, spoken = findings.patient, subject(outcome)
     without_title, with_title = titles(outcome)
     if isinstance(patient, Gap):
-        why = why_no_patient(patient, findings.form, next(iter(findings.measures), ""))
+        why = gap_text(patient)
         return PatientWords(without_title=without_title, with_title=with_title, detail=why, missing=missing(outcome))
     people = denominator or people_for_all(patient)
     patient = starts.at_one_level(patient, choices)
