@@ -138,7 +138,7 @@ def test_the_whole_page_is_told_to_a_screen_reader(opened: Opened) -> None:
     _, screen = opened()
     told = QAccessible.queryAccessibleInterface(screen.canvas)
     description = told.text(QAccessible.Text.Description)
-    for part in ("12 in 100", "6 fewer of these 100", "We cannot say which people.", "Certainty: not rated."):
+    for part in ("12 in 100", "6 fewer of these 100", "We cannot say which people.", "How sure the evidence is: not rated."):
         assert part in description
     assert all(button.accessibleName() for button in screen.findChildren(QAbstractButton) if button.isVisible())
     press(screen, "Right")

@@ -113,8 +113,8 @@ def test_one_array_says_what_it_shows_of_both_groups() -> None:
     key = {
         entry.state: entry.text for entry in picture_words(it._replace(options=USUAL._replace(arrangement="one"))).key
     }
-    assert key["affected"] == "fall at least once with both"
-    assert key["others"] == "do not fall with both"
+    assert key["affected"] == "fall at least once, with both"
+    assert key["others"] == "do not fall, with both"
     assert {entry.text for entry in picture_words(it).key} >= {"fall at least once", "do not fall"}
 
 

@@ -4,16 +4,19 @@ from __future__ import annotations
 
 import re
 from collections.abc import Callable
+from typing import Any
 
 import pytest
 from msgspec.structs import replace
 
 from fourcount.appraisal.findings import OutcomeFindings, PatientFindings
-from fourcount.record.outcome import CERTAINTIES, Outcome, Patient, PersonTime
+from fourcount.record.outcome import CERTAINTIES, Outcome, Pairs, Patient, PersonTime
 from fourcount.wording import plain_texts
 from fourcount.wording.plain import negated, plain_hint, present
-from fourcount.wording.plain_outcome import PlainWords, plain_risks, plain_words, why_not
-from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, SHOWN, SMALL, TRIAL, WELCOME
+from fourcount.wording.plain_outcome import PlainWords, plain_words
+from fourcount.wording.plain_refusal import why_not
+from fourcount.wording.plain_risks import plain_risks
+from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, LONG, SHOWN, SMALL, TRIAL, WELCOME, of_counts
 
 UNWORDED = replace(TRIAL, left_words_text="", right_words_text="", left_heading_text="", right_heading_text="")
 
@@ -153,7 +156,14 @@ def test_person_time_has_words_for_the_others_too() -> None:
 def test_the_page_says_first_both_risks_then_the_difference(say: Callable[..., PlainWords]) -> None:
     """The absolute risks in both frames, the difference, and that nobody knows which people, in this order."""
     sentence = say(AT_TWELVE).sentence
-    order = ["12 in 100", "88 in 100 do not fall", "6 in 100", "94 in 100 do not fall", "6 fewer of these 100", "which"]
+    order = [
+        "12 in 100",
+        "88 in 100 do not fall",
+        "6 in 100",
+        "94 in 100 do not fall",
+        "With night lights, 6 fewer of these 100",
+        "which",
+    ]
     places = [sentence.index(part) for part in order]
     assert places == sorted(places)
     assert "Falls in 12 months" in sentence
@@ -163,6 +173,8 @@ def test_the_people_shown_are_those_at_this_starting_risk(say: Callable[..., Pla
     """They are like the study's only where the starting risk is the study's own."""
     assert say(TRIAL).lead == "These people are like those in the study."
     assert say(AT_TWELVE).lead == "These people start at a risk of 12 in 100."
+    assert say(TRIAL).who == "for people like those in the study"
+    assert say(AT_TWELVE).who == "for people who start at 12 in 100"
 
 
 def test_a_welcome_outcome_is_turned_to_its_complement(say: Callable[..., PlainWords]) -> None:
@@ -171,8 +183,57 @@ def test_a_welcome_outcome_is_turned_to_its_complement(say: Callable[..., PlainW
     assert words.without.number == "55 in 100"
     assert words.with_.number == "40 in 100"
     assert words.with_.other == "60 in 100 heal"
-    assert words.summary == "On balance, 15 fewer of these 100 do not heal."
-    assert words.turned == "The filled figures are people who do not heal."
+    assert words.summary == "With night lights, 15 more of these 100 heal."
+    assert words.turned == "The filled ones are people who do not heal."
+    assert words.avoided == "the 15 more who heal"
+    assert words.relative == "Going from 55 to 40 in 100 who do not heal is also called “27% lower”."
+
+
+@pytest.mark.parametrize(
+    ("changes", "summary"),
+    [
+        ({"counted": "right"}, "15 more of these 100 heal"),
+        ({"left_words_text": "did not heal", "right_words_text": "healed", "left_welcome": False}, "fewer of these"),
+        ({"left_words_text": "had no falls", "right_words_text": "fell"}, "15 fewer of these 100 fall"),
+        ({"left_words_text": "survived", "right_words_text": "died"}, "15 more of these 100 survive"),
+        ({"plain_event_text": "get well", "plain_other_text": "stay ill"}, "15 more of these 100 get well"),
+        ({"right_words_text": ""}, "15 more of these 100 heal"),
+    ],
+    ids=str,
+)
+@pytest.mark.parametrize("certainty", CERTAINTIES)
+def test_no_sentence_has_a_double_negative(
+    changes: dict[str, Any], summary: str, certainty: str, say: Callable[..., PlainWords]
+) -> None:
+    """Whatever is counted and however it is worded, the difference is said of the side that is said positively."""
+    words = say(replace(WELCOME, certainty=certainty, **changes))
+    assert summary in words.summary
+    said = (words.summary, words.certainty, words.avoided, words.added)
+    assert not any(re.search(r"(?:fewer|more).*\b(?:not|no|never)\b", part) for part in said if "not rated" not in part)
+
+
+def test_the_key_has_the_number_of_the_sentence(say: Callable[..., PlainWords]) -> None:
+    """Figures that make the difference are called what the sentence calls them, by the same number."""
+    assert say(AT_TWELVE).avoided == "the 6 fewer who fall at least once"
+    assert say(HARM).added == "the 10 more who bleed"
+    assert say(LONG).avoided == "the 8 fewer"
+
+
+@pytest.mark.parametrize(
+    ("typed", "other"),
+    [
+        ({"right_words_text": "", "right_heading_text": ""}, "88 in 100 do not"),
+        ({"right_words_text": "did not fall at least once"}, "88 in 100 do not"),
+        ({"plain_other_text": "do not fall at least once"}, "88 in 100 do not"),
+        ({"plain_event_text": "are hurt", "plain_other_text": "are not hurt"}, "88 in 100 are not"),
+        ({"right_words_text": "did not fall"}, "88 in 100 do not fall"),
+        ({"plain_other_text": "stay on their feet"}, "88 in 100 stay on their feet"),
+    ],
+    ids=str,
+)
+def test_the_other_frame_is_short(typed: dict[str, str], other: str, say: Callable[..., PlainWords]) -> None:
+    """Beside the event its lack is a bare "do not"; words of its own are kept."""
+    assert say(replace(AT_TWELVE, **typed)).without.other == other
 
 
 @pytest.mark.parametrize("outcome", [TRIAL, HARM, SMALL], ids=["fewer", "more", "small"])
@@ -214,17 +275,47 @@ def test_certainty_is_said_as_it_was_rated(certainty: str, outcome: Outcome, say
 
 
 def test_no_difference_is_left_open_where_the_interval_holds_it(say: Callable[..., PlainWords]) -> None:
-    """An interval through no effect is said in plain words; one beside it is not."""
-    assert say(SMALL, 1_000).open_ == plain_texts.OPEN
+    """An interval through no effect is said right behind the difference; one beside it is not."""
+    words = say(SMALL, 1_000)
+    assert f"{words.summary} The study leaves open that there is no difference." in words.sentence
     assert say(TRIAL).open_ == ""
 
 
-def test_a_study_without_chance_says_so(say: Callable[..., PlainWords]) -> None:
-    """Outside trials the page says that other things may explain the difference, and nothing is "avoided"."""
+@pytest.mark.parametrize(
+    ("design", "table"),
+    [
+        ("cohort", TRIAL.table),
+        ("survey", TRIAL.table),
+        ("case-control", TRIAL.table),
+        (
+            "before-after",
+            Pairs(first_left_text="20", first_right_text="10", second_left_text="30", second_right_text="40"),
+        ),
+    ],
+)
+def test_a_study_without_chance_says_so(design: str, table: Any, say: Callable[..., PlainWords]) -> None:
+    """Outside trials the page says right behind the difference that other things may explain it."""
+    words = say(replace(AT_TWELVE, design=design, table=table))
+    assert words.doubt.startswith("Other things may explain the difference: ")
+    assert f"{words.summary} {words.doubt}" in words.sentence
+    assert say(TRIAL).doubt == ""
+
+
+def test_no_difference_needs_no_other_explanation(say: Callable[..., PlainWords]) -> None:
+    """Of equal risks it is only said that the groups may not have been alike."""
+    equal = of_counts(TRIAL, (38, 374, 38, 374), design="cohort")
+    assert say(equal).doubt == "The groups may not have been alike."
+
+
+def test_groups_are_headed_by_what_they_had_or_by_their_names(say: Callable[..., PlainWords]) -> None:
+    """ "With usual care" in a trial; elsewhere the label as it is, which may be any noun."""
+    assert (say(TRIAL).without.title, say(TRIAL).with_.title) == ("With usual care", "With night lights")
     words = say(CASE_CONTROL)
-    assert "chance did not decide" in words.study
-    assert words.avoided == "fewer, on balance"
-    assert say(TRIAL).study == ""
+    assert (words.without.title, words.with_.title) == ("Day work", "Night work")
+    assert words.summary.startswith("In the group “Night work”, 6 fewer")
+    people = replace(CASE_CONTROL, first_label_text="people who took iron")
+    assert say(people).with_.title == "People who took iron"
+    assert say(people).summary.startswith("Among people who took iron, 6 fewer")
 
 
 @pytest.mark.parametrize("name", SHOWN)

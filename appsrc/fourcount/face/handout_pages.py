@@ -13,7 +13,7 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
 from fourcount.wording import handout_labels as labels
 from fourcount.wording import names
-from fourcount.wording.plain_outcome import why_not
+from fourcount.wording.plain_refusal import why_not
 
 
 class Candidate(NamedTuple):

@@ -18,7 +18,7 @@ from fourcount.face.text import Words
 from fourcount.ink.patient_page import PatientPage
 from fourcount.ink.plain_picture import Shown, shown
 from fourcount.wording import plain_texts
-from fourcount.wording.plain_outcome import why_not as why_no_screen
+from fourcount.wording.plain_refusal import why_not as why_no_screen
 
 if TYPE_CHECKING:
     from fourcount.face.window import MainWindow

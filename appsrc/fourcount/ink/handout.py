@@ -35,15 +35,25 @@ LARGE, BELOW, ASIDE = Setting(False, False), Setting(True, False), Setting(True,
 
 
 class Try(NamedTuple):
-    """A way to set the page: scale and sizes of its text, and how high arrays of a hundred have to come out."""
+    """A way to set the page: scale and sizes of its text, and how high arrays of a hundred have to come out.
+
+    ``whole`` ways are for pages on which no count needs a second line.
+    """
 
     setting: Setting
     scale: float
     sizes: Mapping[Role, float] = SIZES
     least: int = 0
+    whole: bool = False
 
 
-FOR_ONE = tuple(Try(LARGE, scale, SIZES, 200) for scale in (1.3, 1.2, 1.1, 1.0))
+FOR_ONE = tuple(Try(LARGE, scale, SIZES, 200, whole) for whole in (True, False) for scale in (1.3, 1.2, 1.1, 1.0))
+FOR_TWO = (
+    *(Try(LARGE, scale, SIZES, 180, whole=True) for scale in (1.2, 1.1, 1.0)),
+    *(Try(LARGE, scale, SIZES, 170) for scale in (1.2, 1.1, 1.05, 1.0, 0.95)),
+    *(Try(BELOW, scale, SIZES, 200) for scale in (1.1, 1.0)),
+)
+FOR_THREE = tuple(Try(BELOW, scale, SIZES, 150) for scale in (1.1, 1.05, 1.0, 0.95))
 FOR_ANY = (
     *(Try(BELOW, scale, SIZES, 160) for scale in (1.3, 1.2, 1.1)),
     *(Try(BELOW, scale, SIZES, 120) for scale in (1.05, 1.0, 0.95)),
@@ -51,6 +61,9 @@ FOR_ANY = (
     *(Try(ASIDE, scale, COMPACT_SIZES) for scale in (1.0, 0.95, 0.9)),
 )
 """From the best to read to what can just be read: the last has text of 8 points."""
+
+WAYS = {1: FOR_ONE, 2: FOR_TWO, 3: FOR_THREE}
+"""What is tried before that, by the number of outcomes."""
 
 LONGEST_LEAD = (True, False)
 """People drawn as figures and as marks: the words for that are the longest that a page can need."""
@@ -143,7 +156,8 @@ def _composed(record: Record, named: Sequence[Named], paper: Paper, version: str
     for denominator in dict.fromkeys((common, None)):
         pages = [shown(outcome, findings, USUAL, denominator) for outcome, findings in named]
         ready = [_as_marks(it) for it in pages if it]
-        blocks = [Block(it) for it in ready]
+        differ = len({it.words.who for it in ready}) > 1
+        blocks = [Block(it, tells_who=differ) for it in ready]
         fit = _fitted(_words(record, named, ready, LONGEST_LEAD, version, today), blocks, paper)
         if fit is not None:
             wide = (paper.width - 2 * MARGIN) * PER_MM
@@ -175,8 +189,10 @@ def _words(
 def _fitted(page: HandoutWords, blocks: Sequence[Block], paper: Paper) -> _Fit | None:
     """The way to set the page that is best to read and fits; None for none."""
     wide = (paper.width - 2 * MARGIN) * PER_MM
-    for way in (*(FOR_ONE if len(blocks) == 1 else ()), *FOR_ANY):
+    for way in (*WAYS.get(len(blocks), ()), *FOR_ANY):
         style = PaperStyle(way.scale, way.sizes)
+        if way.whole and any(block.counts_wrap(style, wide) for block in blocks):
+            continue
         room = (paper.height - 2 * MARGIN) * PER_MM - _frame_height(page, len(blocks), style, wide)
         array = _highest(blocks, style, way, wide, room)
         if array is not None:

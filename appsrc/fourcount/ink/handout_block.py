@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterator, Sequence
 from typing import NamedTuple
 
 from PySide6.QtCore import QPointF
@@ -10,7 +11,8 @@ from PySide6.QtGui import QPainter
 from fourcount.ink.beside_picture import BesidePicture
 from fourcount.ink.paper_style import PaperStyle
 from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
-from fourcount.ink.plain_picture import PlainPicture, Shown
+from fourcount.ink.plain_picture import PlainPicture, Shown, beside_or_below
+from fourcount.wording import plain_texts
 
 GAP = 24
 """Room between the people and the words beside them, at 100%."""
@@ -24,17 +26,24 @@ LEAST_ARRAY: dict[int | None, int] = {100: 100, 1_000: 100, 10_000: 190, None: 0
 
 
 class Setting(NamedTuple):
-    """How blocks are set: captions beside their people or above them, and words beside the people or below them."""
+    """How blocks are set: captions beside their people or above them, and words beside the people or below them.
+
+    Captions beside people are wide enough for the key where the words stand below.
+    """
 
     captions_aside: bool
     words_aside: bool
 
 
 class Block:
-    """One outcome with its words. More than a hundred people a group take the whole width, whatever the setting."""
+    """One outcome with its words. More than a hundred people a group take the whole width, whatever the setting.
 
-    def __init__(self, it: Shown) -> None:
+    ``tells_who`` says that the head names whose people these are, since another outcome of the page shows others.
+    """
+
+    def __init__(self, it: Shown, tells_who: bool = False) -> None:
         self._it = it
+        self._tells_who = tells_who
         self._hundred = it.plan.denominator == 100
         self._above = PlainPicture(it)
         self._aside = BesidePicture(it)
@@ -46,6 +55,10 @@ class Block:
         aside = setting.captions_aside and self._hundred
         drawn = self._aside.drawn_as(style, wide, array) if aside else self._it.options.icons
         return drawn == "person"
+
+    def counts_wrap(self, style: PaperStyle, width: float) -> bool:
+        """Whether a count needs more than its line where captions stand above their people."""
+        return self._above.counts_wrap(style, width)
 
     def height(self, style: PaperStyle, setting: Setting, width: float, array: float) -> float:
         """Height with arrays of at most ``array``, but not less than their least."""
@@ -83,34 +96,51 @@ class Block:
     ) -> float:
         x, y = corner.x(), corner.y()
         if setting.captions_aside and self._hundred:
-            if painter is None:
-                return self._aside.height(style, width, array)
-            return self._aside.draw(painter, style, x, y, width, array)
+            return self._aside.draw(painter, style, corner, width, array, not setting.words_aside)
         within = self._above.height(style, width, 0) + array
         if painter is None:
             return self._above.height(style, width, within)
         return self._above.draw(painter, style, x, y, width, within)
 
     def _title(self, painter: QPainter | None, style: PaperStyle, x: float, y: float, width: float) -> float:
-        words, palette = self._it.words, style.palette
-        runs = [Run(words.title, style.font("total"), palette.ink), Run(words.lead, style.font("body"), palette.muted)]
-        return _paragraph(painter, x, y, width, runs)
+        words, ink, body = self._it.words, style.palette.ink, style.font("body")
+        head = plain_texts.HEAD.format(title=words.title, who=words.who) if self._tells_who else words.title
+        said = beside_or_below(
+            [
+                Run(head, style.font("total"), ink),
+                Run("" if self._tells_who else words.lead, body, style.palette.muted),
+                Run(words.turned if self._it.plan.denominator else "", body, ink),
+            ],
+            width,
+        )
+        return sum(_paragraphs(painter, x, y, width, said, style.px(1)))
 
     def _words(self, painter: QPainter | None, style: PaperStyle, x: float, y: float, width: float) -> float:
-        """The difference first, then that nobody knows which people; the relative figure; how sure one can be."""
-        words, palette, body, top = self._it.words, style.palette, style.font("body"), y
-        paragraphs = [
-            [Run(words.summary, style.font("total"), palette.ink), Run(words.which, body, palette.muted)],
-            [Run(words.relative, body, palette.ink)],
-            [Run(line, body, palette.ink) for line in words.other_starts],
-            [Run(words.certainty, body, palette.ink), Run(words.open_, body, palette.ink)],
-            [Run(words.study, body, palette.muted)],
+        """The difference first with what makes it doubtful; that nobody knows which people; the relative figure."""
+        words, palette, body = self._it.words, style.palette, style.font("body")
+        total = style.font("total")
+        rest = (words.which, words.certainty, words.relative, *words.other_starts)
+        said = [
+            *beside_or_below([Run(words.summary, total, palette.ink), Run(words.open_, total, palette.ink)], width),
+            [Run(words.doubt, style.font("cell"), palette.ink)],
+            [*(Run(text, body, palette.ink) for text in rest), Run(words.study, body, palette.muted)],
         ]
-        for runs in paragraphs:
-            spoken = [run for run in runs if run.text]
-            if spoken:
-                y += _paragraph(painter, x, y, width, spoken) + style.px(PARAGRAPH)
-        return y - style.px(PARAGRAPH) - top
+        return sum(_paragraphs(painter, x, y, width, said, style.px(PARAGRAPH)))
+
+
+def _paragraphs(
+    painter: QPainter | None, x: float, y: float, width: float, said: Sequence[Sequence[Run]], gap: float
+) -> Iterator[float]:
+    """Set paragraphs one under the other and give the height that each took, with the space before it."""
+    before = 0.0
+    for runs in said:
+        spoken = [run for run in runs if run.text]
+        if spoken:
+            y += before
+            tall = _paragraph(painter, x, y, width, spoken)
+            y += tall
+            yield before + tall
+            before = gap
 
 
 def _paragraph(painter: QPainter | None, x: float, y: float, width: float, runs: list[Run]) -> float:

@@ -2,12 +2,14 @@
 
 from __future__ import annotations
 
+from collections.abc import Sequence
+
 from PySide6.QtCore import QRectF
 from PySide6.QtGui import QColor, QPainter
 
 from fourcount.ink.paper_style import SCREEN_SIZES, PaperStyle
 from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
-from fourcount.ink.plain_picture import PlainPicture, Shown
+from fourcount.ink.plain_picture import PlainPicture, Shown, beside_or_below
 from fourcount.wording import plain_texts
 
 DESIGNED_FOR = (1280, 690)
@@ -18,8 +20,17 @@ LARGEST = 3.2
 LEAST_AT_ONE = 0.93
 """At this scale the page's text is as large as the window's own."""
 
+DOUBT = 16
+"""Text size, at 100%, of what is next in weight to the difference."""
+
+WORTH_A_LINE = 0.2
+"""How much smaller all text may be so that no count wraps."""
+
 STEPS = 12
 MARGIN = 45
+
+Spaced = tuple[Sequence[Run], float]
+"""A paragraph and the space below it."""
 
 
 class PatientPage:
@@ -27,7 +38,7 @@ class PatientPage:
 
     def __init__(self, it: Shown) -> None:
         self._words = it.words
-        self._drawn = it.plan.denominator is not None
+        self._drawn = it.plan.denominator is not None and it.options.arrangement != "bars"
         self._icons = it.options.icons
         self._range = it.options.uncertainty
         self._picture = PlainPicture(it)
@@ -39,15 +50,17 @@ class PatientPage:
         """
         least = LEAST_AT_ONE * zoom
         wanted = min(AT_THAT_SIZE * min(width / DESIGNED_FOR[0], height / DESIGNED_FOR[1]) * max(zoom, 1.0), LARGEST)
+        first = None
         for step in range(STEPS):
             style = PaperStyle(max(wanted * (1 - step * 0.05), least), SCREEN_SIZES)
-            if (
-                self._text_height(style, self._wide(style, width))
-                + self._picture.good_height(style, self._wide(style, width))
-                <= height
-            ):
-                return style
-        return PaperStyle(least, SCREEN_SIZES)
+            wide = self._wide(style, width)
+            if self._text_height(style, wide) + self._picture.good_height(style, wide) <= height:
+                if not self._picture.counts_wrap(style, wide):
+                    return style
+                first = first or style
+            if first and step * 0.05 >= WORTH_A_LINE:
+                break
+        return first or PaperStyle(least, SCREEN_SIZES)
 
     def least_height(self, style: PaperStyle, width: float) -> float:
         """Height below which nothing would be left of the picture."""
@@ -62,28 +75,33 @@ class PatientPage:
         painter.fillRect(QRectF(0, 0, width, height), QColor(style.palette.page))
         x, y, wide = style.px(MARGIN), float(style.px(20)), self._wide(style, width)
         room = max(height - self._text_height(style, wide), self._picture.least_height(style, wide))
-        for runs, gap in self._above(style):
+        for runs, gap in self._above(style, wide):
             y += draw_paragraph(painter, x, y, wide, runs) + gap
         y += self._picture.draw(painter, style, x, y, wide, room) + style.px(14)
-        for runs, gap in self._below(style):
+        for runs, gap in self._below(style, wide):
             y += draw_paragraph(painter, x, y, wide, runs) + gap
 
     def _text_height(self, style: PaperStyle, wide: float) -> float:
-        paragraphs = (*self._above(style), *self._below(style))
+        paragraphs = (*self._above(style, wide), *self._below(style, wide))
         return sum(paragraph_height(runs, wide) + gap for runs, gap in paragraphs) + style.px(20 + 14)
 
-    def _above(self, style: PaperStyle) -> list[tuple[list[Run], float]]:
-        ink, muted, body = style.palette.ink, style.palette.muted, style.font("body")
+    def _above(self, style: PaperStyle, wide: float) -> list[Spaced]:
+        words, ink, muted, body = self._words, style.palette.ink, style.palette.muted, style.font("body")
         each = {"person": plain_texts.EACH_FIGURE}.get(self._icons, plain_texts.EACH_MARK) if self._drawn else ""
+        turned = words.turned if self._drawn else ""
         return [
-            ([Run(self._words.title, style.font("estimate"), ink)], style.px(3)),
-            ([Run(each, body, muted), Run(self._words.lead, body, muted)], style.px(14)),
+            ([Run(words.title, style.font("estimate"), ink)], style.px(3)),
+            ([Run(each, body, muted), Run(words.lead, body, muted), Run(turned, body, ink)], style.px(14)),
         ]
 
-    def _below(self, style: PaperStyle) -> list[tuple[list[Run], float]]:
+    def _below(self, style: PaperStyle, wide: float) -> list[Spaced]:
+        """The difference with what makes it doubtful, which must not be missed; how sure one can be of it."""
         words, ink, muted, body = self._words, style.palette.ink, style.palette.muted, style.font("body")
-        after = [Run(words.certainty, body, ink), Run(words.open_, body, ink), Run(words.study, body, muted)]
-        return [
-            ([Run(words.summary, style.font("sentence"), ink), Run(words.which, body, muted)], style.px(4)),
-            ([run for run in after if run.text], style.px(8)),
+        sentence = style.font("sentence")
+        said = [
+            *beside_or_below([Run(words.summary, sentence, ink), Run(words.open_, sentence, ink)], wide),
+            [Run(words.doubt, style.sized(DOUBT), ink)],
+            [Run(words.which, body, ink), Run(words.certainty, body, ink), Run(words.study, body, muted)],
         ]
+        spoken = [runs for runs in said if any(run.text for run in runs)]
+        return [*((runs, style.px(3)) for runs in spoken[:-1]), (spoken[-1], style.px(8))]

@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Sequence
 from typing import NamedTuple
 
-from PySide6.QtGui import QPainter
+from PySide6.QtGui import QFont, QPainter
 
 from fourcount.appraisal.findings import Gap, OutcomeFindings
 from fourcount.ink.paper_style import PaperStyle
@@ -20,10 +20,24 @@ from fourcount.wording import numbers, plain_texts
 from fourcount.wording.axis import axis_words
 from fourcount.wording.picture_words import KeyEntry, PictureWords, Side, people_of
 from fourcount.wording.plain import is_turned
-from fourcount.wording.plain_outcome import PlainSide, PlainWords, plain_risks, plain_words, why_not
+from fourcount.wording.plain_outcome import PlainSide, PlainWords, plain_words
+from fourcount.wording.plain_refusal import why_not
+from fourcount.wording.plain_risks import plain_risks
 
-LEAST_ARRAY, GOOD_ARRAY = 110, 190
-"""How high an array is at least, and where there is room, at 100%: a hundred people of some 11 and 19 pixels."""
+LEAST_ARRAY, GOOD_ARRAY = 110, 205
+"""How high an array is at least, and where there is room, at 100%: a hundred people of some 11 and 20 pixels."""
+
+FIGURE_SIZES = (1.0, 0.95, 0.9, 0.85, 0.8)
+"""Parts of the usual size at which a count may be set to stay on one line."""
+
+ON_ONE_LINE = 3
+"""Paragraphs of a caption whose count and percentage share a line."""
+
+ENDLESS = 100_000.0
+"""A width at which nothing wraps."""
+
+Caption = tuple[Sequence[Run], ...]
+"""The paragraphs of a group's caption."""
 
 
 class Shown(NamedTuple):
@@ -77,6 +91,14 @@ class PlainPicture:
         good = self.height(style, width, 0) + (0 if self._bare.bars else style.px(GOOD_ARRAY))
         return min(good, self.height(style, width))
 
+    def counts_wrap(self, style: PaperStyle, width: float) -> bool:
+        """Whether a count needs more than its line, where each group's stands over its own people."""
+        columns = self._own_columns(style, width)
+        if not columns:
+            return False
+        sides = (self._words.without, self._words.with_)
+        return any(len(block) > ON_ONE_LINE for block in captions(style, sides, columns[0][1]))
+
     def draw(
         self, painter: QPainter, style: PaperStyle, x: float, y: float, width: float, within: float | None = None
     ) -> float:
@@ -86,24 +108,31 @@ class PlainPicture:
     def _run(
         self, painter: QPainter | None, style: PaperStyle, x: float, y: float, width: float, within: float | None
     ) -> float:
-        columns = self._bare.columns(style, width)
-        if len(columns) != 2 or columns[0][0] == columns[1][0] or self._bare.bars:
+        columns = self._own_columns(style, width)
+        if not columns:
             return _picture(self._captioned, painter, style, x, y, width, within)
         sides = (self._words.without, self._words.with_)
-        blocks = [caption(style, side) for side in sides]
+        blocks = captions(style, sides, columns[0][1])
         heights = [
             max(paragraph_height(block[line], wide) for block, (_, wide) in zip(blocks, columns, strict=True))
             for line in range(len(blocks[0]))
         ]
-        gaps = (style.px(4), 0, style.px(10))
-        top = y
-        for line, (tall, gap) in enumerate(zip(heights, gaps, strict=True)):
+        top, last = y, len(heights) - 1
+        for line, tall in enumerate(heights):
+            gap = style.px({0: 4, last: 10}.get(line, 0))
             if painter:
                 for block, (left, wide) in zip(blocks, columns, strict=True):
                     draw_paragraph(painter, x + left, y, wide, block[line])
             y += tall + gap
         left_over = None if within is None else within - (y - top)
         return y + _picture(self._bare, painter, style, x, y, width, left_over) - top
+
+    def _own_columns(self, style: PaperStyle, width: float) -> tuple[tuple[float, float], ...]:
+        """Left edge and width of both groups' columns; none where one picture holds both or they stand stacked."""
+        columns = self._bare.columns(style, width)
+        if len(columns) != 2 or columns[0][0] == columns[1][0] or self._bare.bars:
+            return ()
+        return columns
 
 
 def _picture(
@@ -120,15 +149,48 @@ def _picture(
     return picture.draw(painter, style, x, y, width, within)
 
 
-def caption(style: PaperStyle, side: PlainSide) -> tuple[Sequence[Run], Sequence[Run], Sequence[Run]]:
-    """Name, count and the other frame: three paragraphs, so that both groups' lines stand level."""
+def captions(style: PaperStyle, sides: Sequence[PlainSide], width: float) -> list[Caption]:
+    """Each group's name, count and other frame, in as many paragraphs for all, so that their lines stand level.
+
+    Count and percentage stand on one line where both groups' do at some size, else the percentages on their own.
+    """
+    for part in FIGURE_SIZES:
+        figure = _part_of(style.font("figure"), part)
+        counts = [_count(style, side, figure) for side in sides]
+        if all(on_one_line(count, width) for count in counts):
+            return [_caption(style, side, count) for side, count in zip(sides, counts, strict=True)]
+    figure = style.font("figure")
+    return [_caption(style, side, *([run] for run in _count(style, side, figure))) for side in sides]
+
+
+def _caption(style: PaperStyle, side: PlainSide, *counts: Sequence[Run]) -> Caption:
     ink, muted = style.palette.ink, style.palette.muted
-    figure, body = style.font("figure"), style.font("body")
-    return (
-        (Run(side.title, style.font("strong"), ink),),
-        (Run(f"{side.number} {side.event}", figure, ink), Run(side.percent, body, muted)),
-        (Run(side.other, body, muted),),
-    )
+    return ((Run(side.title, style.font("strong"), ink),), *counts, (Run(side.other, style.font("body"), muted),))
+
+
+def _count(style: PaperStyle, side: PlainSide, figure: QFont) -> list[Run]:
+    """ "12 in 100 fall (12%)"."""
+    count = Run(f"{side.number} {side.event}", figure, style.palette.ink)
+    return [count, Run(side.percent, style.font("body"), style.palette.muted)]
+
+
+def on_one_line(runs: Sequence[Run], width: float) -> bool:
+    """Whether a paragraph does not wrap."""
+    return paragraph_height(runs, width) <= paragraph_height(runs, ENDLESS)
+
+
+def beside_or_below(runs: Sequence[Run], width: float) -> list[Sequence[Run]]:
+    """Sentences in one line where they fit it, else each in a paragraph of its own."""
+    spoken = [run for run in runs if run.text]
+    if not spoken or on_one_line(spoken, width):
+        return [spoken] if spoken else []
+    return [[run] for run in spoken]
+
+
+def _part_of(font: QFont, part: float) -> QFont:
+    smaller = QFont(font)
+    smaller.setPixelSize(round(font.pixelSize() * part))
+    return smaller
 
 
 def picture_words(it: Shown) -> PictureWords:
@@ -137,10 +199,10 @@ def picture_words(it: Shown) -> PictureWords:
     pattern = plain_texts.EITHER_WAY if it.options.arrangement == "one" else "{words}"
     entries = (
         KeyEntry("affected", pattern.format(words=words.event)),
-        KeyEntry("added", words.added),
-        KeyEntry("uncertain", plain_texts.EITHER),
-        KeyEntry("avoided", words.avoided),
         KeyEntry("others", pattern.format(words=words.other)),
+        KeyEntry("added", words.added),
+        KeyEntry("avoided", words.avoided),
+        KeyEntry("uncertain", plain_texts.EITHER),
     )
     low, _, high = axis_words("risk", bar_pair(plan).top)
     return PictureWords(
@@ -159,7 +221,7 @@ def _side(side: PlainSide) -> Side:
 
 def _note(it: Shown) -> str:
     """What has to be said of the picture itself."""
-    parts = [it.words.turned if it.plan.denominator else ""]
+    parts = []
     if it.plan.denominator is None:
         parts.append(plain_texts.TOO_SMALL)
     elif it.plan.denominator != 100:

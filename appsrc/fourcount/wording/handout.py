@@ -17,7 +17,7 @@ from fourcount.wording.standing import STANDING_FULL
 from fourcount.wording.subject import subject
 
 HEADING = "{reference} or {index}"
-ALL_SHOW = "Each picture shows {people} people, so you can set them side by side."
+ALL_SHOW = "Each picture shows {people} people, so you can compare them."
 ONE_SHOWS = "The picture shows {people} people."
 DIFFERENT = "The pictures do not all show the same number of people: see the number in each."
 WORKED_OUT = "{name}: {basis}"

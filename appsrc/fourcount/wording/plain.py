@@ -161,6 +161,16 @@ def unwelcome_column(outcome: Outcome) -> Column:
     return "right" if outcome.left_welcome else "left"
 
 
+def says_the_other(outcome: Outcome, event: str, other: str) -> bool:
+    """Whether the difference is said of the people who are not drawn as affected: the side that is said positively.
+
+    "15 more heal" and not "15 fewer do not heal"; where both sides can be said, the welcome one of a welcome outcome.
+    """
+    if is_negative(event) != is_negative(other):
+        return is_negative(event)
+    return outcome.left_welcome
+
+
 def is_turned(outcome: Outcome) -> bool:
     """Whether a page counts the other column than the record does: risks are then turned to their complements."""
     return outcome.welcome

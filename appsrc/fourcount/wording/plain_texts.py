@@ -20,34 +20,37 @@ EACH_MARK = "Each mark is one person."
 EACH_FIGURE_OR_MARK = "Each figure or mark is one person."
 LIKE_THE_STUDY = "These people are like those in the study."
 START_AT = "These people start at a risk of {count} in {people}."
-CHANGE = "On balance, {number} {side} of these {people} {event}."
+FOR_LIKE_THE_STUDY = "for people like those in the study"
+FOR_START_AT = "for people who start at {count} in {people}"
+HEAD = "{title}, {who}"
+CHANGE = "{index}, {number} {side} of these {people} {event}."
 SAME = "There is no difference: the same number of these {people} {event}."
-TURNED = "The filled figures are people who {event}."
+TURNED = "The filled ones are people who {event}."
+DRAWN = " who {event}"
 ROUNDED = "Numbers are rounded, so they may not add up."
 TOO_SMALL = "The risks are too small to draw as people."
 EACH_PICTURE = "Each picture shows {people} people."
 EITHER = "could go either way"
-EITHER_WAY = "{words} with both"
+EITHER_WAY = "{words}, with both"
 """What the key says where one array shows both groups."""
 
-AVOIDED = "{name}avoided, on balance"
-ADDED = "{name}added, on balance"
-FEWER, MORE = "fewer, on balance", "more, on balance"
-"""The same in a study whose groups chance did not make alike: nothing says what they were avoided by."""
+CHANGED = "the {number} {side} who {event}"
+CHANGED_ALONE = "the {number} {side}"
+"""The key of figures that make the difference, in the words of the sentence that says it; and of a long event."""
 
 LONGEST_KEY = 40
 OPEN = "The study leaves open that there is no difference."
-RANGE = "{index}, it could be from {low} to {high} in {people}."
-RELATIVE = "Going from {before} to {after} in {people} is also called “{percent} {word}”."
+RANGE = "{index}, it could be from {low} to {high} in {people}{drawn}."
+RELATIVE = "Going from {before} to {after} in {people}{drawn} is also called “{percent} {word}”."
 BEFORE_ROUNDING = "(That is worked out before rounding.)"
-OTHER_START = "For people who start at {before} in {people}, it is {after} in {people} {index}."
+OTHER_START = "For people who start at {before} in {people}, it is {after} in {people}{drawn} {index}."
 
 CERTAINTY_NAMES: dict[Certainty, str] = {
-    "": "Certainty: not rated.",
-    "high": "Certainty: high, as rated by your clinician.",
-    "moderate": "Certainty: moderate, as rated by your clinician.",
-    "low": "Certainty: low, as rated by your clinician.",
-    "very-low": "Certainty: very low, as rated by your clinician.",
+    "": "How sure the evidence is: not rated.",
+    "high": "How sure the evidence is: high, as rated by your clinician.",
+    "moderate": "How sure the evidence is: moderate, as rated by your clinician.",
+    "low": "How sure the evidence is: low, as rated by your clinician.",
+    "very-low": "How sure the evidence is: very low, as rated by your clinician.",
 }
 CERTAINTY: dict[Certainty, dict[str, str]] = {
     "": dict.fromkeys(("fewer", "more", "same"), ""),
@@ -74,14 +77,16 @@ CERTAINTY: dict[Certainty, dict[str, str]] = {
 }
 """What the rated certainty lets one say; ``index`` is "with night lights"."""
 
-NOT_BY_CHANCE = "In this study, chance did not decide who was in which group. Other things may explain the difference."
-STUDIES: dict[Design, str] = {
-    "cohort": NOT_BY_CHANCE,
-    "survey": f"The study asked people at one point in time. {NOT_BY_CHANCE}",
-    "case-control": NOT_BY_CHANCE,
-    "matched": NOT_BY_CHANCE,
-    "before-after": "The study looked at people before and after. Other things may have changed as well.",
+DOUBT = "Other things may explain the difference: {why}."
+NOT_ALIKE: dict[Design, str] = {
+    "cohort": "the groups may not have been alike",
+    "survey": "the groups may not have been alike, and people were asked only once",
+    "case-control": "the groups may not have been alike",
+    "matched": "the groups may not have been alike",
+    "before-after": "more may have changed in that time",
 }
+"""Why a study whose groups chance did not make alike shows no cause."""
+
 VARIED = "Not all people in the study were followed for the same time{span}."
 OTHER_SPAN = "The study ran for {span}. For {other}, we assume that the risk goes on as before."
 

@@ -1,0 +1,43 @@
+"""Why an outcome cannot be shown to a patient yet, in one sentence that names what is missing."""
+
+from __future__ import annotations
+
+from fourcount.appraisal.findings import Gap, OutcomeFindings
+from fourcount.record.outcome import Outcome
+from fourcount.wording import carried, plain, plain_texts
+from fourcount.wording.form import lacking
+from fourcount.wording.gaps import gap_text, why_no_patient
+from fourcount.wording.patient import missing
+from fourcount.wording.subject import subject
+
+
+def why_not(outcome: Outcome, findings: OutcomeFindings) -> str:
+    """Why this outcome cannot be shown to a patient; "" where it can.
+
+    Names are asked for as the page would say them, figures as the table gives them.
+    """
+    lacks = missing_items(subject(outcome))
+    if lacks:
+        return plain_texts.MISSING.format(items=_listed(lacks))
+    patient = findings.patient
+    if isinstance(patient, Gap):
+        return why_no_patient(lacking(findings) or patient, findings.form, next(iter(findings.measures), ""))
+    if isinstance(patient.with_.estimate, Gap):
+        return carried.reason(patient.with_.estimate, patient, findings)
+    return gap_text(patient.without.estimate) if isinstance(patient.without.estimate, Gap) else ""
+
+
+def missing_items(outcome: Outcome) -> tuple[str, ...]:
+    """What the reader has not named yet; without it nobody is shown a picture."""
+    plainly = (outcome.plain_event_text if outcome.counts_left else outcome.plain_other_text).strip()
+    lacks = [item for item in missing(outcome) if not (item == "the event" and plainly)]
+    items = [plain_texts.ITEMS.get(item, item) for item in lacks]
+    counted = plain.plain_said(outcome, plain.unwelcome_column(outcome))
+    if not counted and plain_texts.ITEMS["the event"] not in items:
+        items.insert(0, plain_texts.OTHER_OUTCOME)
+    return tuple(items)
+
+
+def _listed(items: tuple[str, ...]) -> str:
+    *before, last = items
+    return f"{', '.join(before)} and {last}" if before else last
