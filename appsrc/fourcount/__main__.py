@@ -53,6 +53,10 @@ def _run(given: list[str]) -> int:
         return _say(words.HELP)
     if given[0] == "--version":
         return _say(f"fourcount {__version__}\n")
+    if _is_a_file(given[0]):
+        if len(given) > 1:
+            raise MistypedError(words.ONE_RECORD)
+        return _open_window(given[0])
     kind = "option" if given[0].startswith("-") else "command"
     raise MistypedError(words.UNKNOWN.format(kind=kind, text=_quoted(given[0])))
 
@@ -199,14 +203,21 @@ def _parsed(given: list[str]) -> tuple[Namespace, list[str]]:
     return parser.parse_known_intermixed_args([f" {word}" if _MINUS_NUMBER.match(word) else word for word in given])
 
 
-def _open_window() -> int:
+def _is_a_file(word: str) -> bool:
+    """Whether a word that is no command names a file: it is there, or it looks like one."""
+    if word.startswith("-"):
+        return False
+    return word.lower().endswith(".fourcount") or any(sign in word for sign in "/\\") or os.path.exists(word)  # noqa: PTH110 -- never raises
+
+
+def _open_window(path: str = "") -> int:
     if sys.platform.startswith("linux") and not _display_in(os.environ):
         _complain(words.NO_DISPLAY)
         return FAILED
     import fourcount.face.running_start  # noqa: F401 - before Qt is loaded
     from fourcount.face.application import run
 
-    return int(run())
+    return int(run(path))
 
 
 def _display_in(environment: Mapping[str, str]) -> bool:

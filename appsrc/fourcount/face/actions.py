@@ -60,6 +60,9 @@ COMMANDS = (
 """All commands in the order of the menus, but for those that take a form of print."""
 
 LATER_COMMANDS = (
+    Command("open", "file", Standard.Open),
+    Command("save", "file", Standard.Save),
+    Command("save-as", "file", Standard.SaveAs),
     Command("handout", "file", Standard.Print),
     Command("own-line", "table", "Ctrl+4"),
     Command("show-patient", "view", "F11"),
@@ -73,16 +76,20 @@ LATER_COMMANDS = (
     Command("outcome-left", "outcomes", "Ctrl+Shift+PgUp"),
     Command("outcome-right", "outcomes", "Ctrl+Shift+PgDown"),
     Command("outcome-remove", "outcomes", "Ctrl+Shift+W", parts_from_last=True),
+    Command("kept", "help", "Ctrl+Shift+K"),
 )
 """Commands that are made once the window has painted."""
 
-PLACES = {"handout": "quit", "show-patient": "bigger", "curve": "bigger"}
+PLACES = {
+    "open": "example", "save": "quit", "save-as": "quit", "handout": "quit", "show-patient": "bigger",
+    "curve": "bigger", "kept": "about",
+}  # fmt: skip
 """Before which command a later one stands in its menu, where that is not its end."""
 
 FORM_COMMANDS = tuple(Command(f"form-{form}", "forms", f"F{number}") for number, form in enumerate(FORMS, start=2))
 """One for each form; they are made once the window has painted."""
 
-MORE_KEYS = {"redo": "Ctrl+Y", "bigger": "Ctrl+="}
+MORE_KEYS = {"redo": "Ctrl+Y", "bigger": "Ctrl+=", "save-as": "Ctrl+Shift+S"}
 """Further keys that people expect, taken where the platform does not have them already."""
 
 
@@ -137,7 +144,8 @@ def add_later(window: QMainWindow, menus: dict[str, QMenu], actions: dict[str, Q
             menu.insertAction(actions[PLACES[command.key]], made[command.key])
         else:
             menu.addAction(made[command.key])
-    menus["file"].insertSeparator(made["handout"])
+    for key in ("save", "handout"):
+        menus["file"].insertSeparator(made[key])
     menus["view"].insertSeparator(actions["bigger"])
     menus["view"].insertMenu(actions["more"], menus["picture"])
     menus["table"].addSeparator()
@@ -164,9 +172,10 @@ def add_drawing(menu: QMenu, icons: str, arrangement: str) -> tuple[QActionGroup
 
 def command_names() -> dict[str, str]:
     """What every command is called."""
+    from fourcount.wording.keeping import FILE_COMMANDS
     from fourcount.wording.patient_labels import OUTCOME_COMMANDS, PATIENT_COMMANDS
 
-    return labels.COMMANDS | PATIENT_COMMANDS | OUTCOME_COMMANDS
+    return labels.COMMANDS | FILE_COMMANDS | PATIENT_COMMANDS | OUTCOME_COMMANDS
 
 
 def add_forms(window: QMainWindow, menu: QMenu) -> dict[str, QAction]:

@@ -12,7 +12,7 @@ from PySide6.QtWidgets import QWidget
 
 from fourcount.face import clipboard, dialogs
 from fourcount.face.own_choices import OwnChoices
-from fourcount.face.session import Session
+from fourcount.face.session import Document, Session
 from fourcount.ink.style import Style
 from fourcount.record import editing
 from fourcount.record.outcome import CELLS, Design, Form, Layout, Outcome, PaperMeasure, form_of
@@ -78,7 +78,8 @@ class Commands(QObject):
 
     def new_table(self) -> None:
         """Begin with an empty record and the intervals last chosen by hand; undo brings the last one back."""
-        self._session.change_record(Record(choices=self.own.choices))
+        record = Record(choices=self.own.choices)
+        self._session.change_record(record, document=Document(record))
         self.cell_wanted.emit()
         self.tell_unusual_choices()
 
@@ -87,7 +88,8 @@ class Commands(QObject):
         from fourcount.wording.example import worked_example
 
         self.own.bring(worked_example().choices)
-        self._session.change_record(worked_example())
+        record = worked_example()
+        self._session.change_record(record, document=Document(record))
         self.cell_wanted.emit()
 
     def swap_groups(self) -> None:

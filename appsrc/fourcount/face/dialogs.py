@@ -19,21 +19,6 @@ DIALOG_WIDTH = 460
 """Wide enough for a dialog's title."""
 
 
-def may_discard(parent: QWidget) -> bool:
-    """Ask whether what was typed may be lost."""
-    from PySide6.QtWidgets import QMessageBox
-
-    box = QMessageBox(parent)
-    box.setWindowTitle(labels.CLOSE_TITLE)
-    box.setText(labels.CLOSE_QUESTION)
-    discard = box.addButton(labels.CLOSE_YES, QMessageBox.ButtonRole.DestructiveRole)
-    keep = box.addButton(labels.CLOSE_NO, QMessageBox.ButtonRole.RejectRole)
-    box.setDefaultButton(keep)
-    box.setEscapeButton(keep)
-    box.exec()
-    return box.clickedButton() is discard
-
-
 def ask_level(parent: QWidget, now: str, problem: str = "") -> str | None:
     """Ask for a confidence level, with what was wrong with the last answer; None if nothing was chosen."""
     from PySide6.QtWidgets import QInputDialog

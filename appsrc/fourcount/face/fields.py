@@ -18,10 +18,10 @@ from PySide6.QtGui import (
     QPaintEvent,
     QPen,
 )
-from PySide6.QtWidgets import QComboBox, QLineEdit, QMenu, QSizePolicy, QWidget
+from PySide6.QtWidgets import QComboBox, QMenu, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
-from fourcount.face.text import tip
+from fourcount.face.text import TextOnly, tip
 from fourcount.ink.style import Role
 from fourcount.ink.typeset import bounded
 
@@ -39,7 +39,7 @@ def draw_underline(widget: QWidget, painter: QPainter, look: Look, marked: bool 
     painter.fillRect(QRect(0, widget.height() - width, widget.width(), width), look.colour(part))
 
 
-class TextField(QLineEdit):
+class TextField(TextOnly):
     """One line of text that is kept as typed.
 
     The window's undo is the only one: this field leaves Ctrl+Z to it.

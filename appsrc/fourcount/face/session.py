@@ -10,9 +10,24 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 
 if TYPE_CHECKING:
+    from pathlib import Path
+
     from fourcount.appraisal.findings import OutcomeFindings
 
 RECORD_FIELDS = ("title_text", "source_text")
+
+
+class Document:
+    """Where a record is kept: its file, what stands in it as far as is known, and the record as saved there.
+
+    ``path`` is None while there is no file; ``digest`` is of the bytes last read or written, "" while there are none;
+    ``saved`` is what a new record began with until there is a file, and None where the file cannot be read any more.
+    """
+
+    def __init__(self, saved: Record | None, path: Path | None = None, digest: str = "") -> None:
+        self.saved = saved
+        self.path = path
+        self.digest = digest
 
 
 class Step(NamedTuple):
@@ -20,12 +35,14 @@ class Step(NamedTuple):
 
     ``field`` is the one that was typed into ("" for a command). ``before`` and ``after`` are the outcomes in view on
     either side of the change, None where it was no outcome's but the paper's: then the view stays where it is.
+    ``document`` is where the state's record is kept, since a new table is a step too.
     """
 
     record: Record
     field: str
     before: int | None
     after: int | None
+    document: Document
 
 
 class Session(QObject):
@@ -46,6 +63,7 @@ class Session(QObject):
     def __init__(self, record: Record | None = None, parent: QObject | None = None) -> None:
         super().__init__(parent)
         self.record = record or Record()
+        self.document = Document(self.record)
         self.findings: OutcomeFindings | None = None
         self._appraised: tuple[Outcome, Choices] | None = None
         self.view = 0
@@ -67,6 +85,18 @@ class Session(QObject):
     def can_redo(self) -> bool:
         return bool(self._future)
 
+    @property
+    def unsaved(self) -> bool:
+        """Whether closing would lose something: choices of intervals alone are remembered without a file."""
+        document, record = self.document, self.record
+        if record == document.saved:
+            return False
+        if document.path is not None or document.saved is None or record.choices == document.saved.choices:
+            return True
+        from fourcount.record import editing
+
+        return editing.with_choices(record, document.saved.choices) != document.saved
+
     def wake(self) -> None:
         """Appraise from now on: called once the window has painted, so that the first paint waits for nothing."""
         if not self.awake:
@@ -85,7 +115,7 @@ class Session(QObject):
         if record == self.record:
             return
         if self._run != field:
-            self._past.append(Step(self.record, field, place, place))
+            self._past.append(Step(self.record, field, place, place, self.document))
             self._run = field
         self._take(record)
 
@@ -98,21 +128,31 @@ class Session(QObject):
         """Take a new outcome in view, as one step."""
         self.change_record(self._with(outcome))
 
-    def change_record(self, record: Record, view: int | None = None) -> None:
+    def change_record(self, record: Record, view: int | None = None, document: Document | None = None) -> None:
         """Take a new record, as one step, and bring an outcome into view; nothing happens if both are as they were.
 
-        Without a place the view stays where no other outcome has changed, and goes to the first one otherwise.
+        Without a place the view stays where no other outcome has changed, and goes to the first one otherwise. With a
+        document the record is another paper's.
         """
-        if record == self.record:
+        if record == self.record and document is None:
             self.look_at(self.view if view is None else view)
             return
         after = _checked(record, self._place_in(record) if view is None else view)
         of_an_outcome = record.outcomes != self.record.outcomes or after != self.view
-        places = (self.view, after) if of_an_outcome else (None, None)
-        self._past.append(Step(self.record, "", *places))
+        before, there = (self.view, after) if of_an_outcome else (None, None)
+        self._past.append(Step(self.record, "", before, there, self.document))
         self._run = ""
+        self.document = document or self.document
         self.view = after
         self._take(record)
+
+    def begin(self, record: Record, document: Document) -> None:
+        """Take the record of another file, with neither past nor future."""
+        self._past.clear()
+        self._future.clear()
+        self._run, self.view = "", 0
+        self.record, self.document = record, document
+        self.announce()
 
     def look_at(self, place: int) -> None:
         """Bring another outcome into view; this ends a run of typing and is no step."""
@@ -182,8 +222,8 @@ class Session(QObject):
     def _travel(self, source: list[Step], target: list[Step], view: int | None) -> None:
         self._run = ""
         step = source.pop()
-        target.append(step._replace(record=self.record))
-        self.record = step.record
+        target.append(step._replace(record=self.record, document=self.document))
+        self.record, self.document = step.record, step.document
         self.view = self.view if view is None else view
         self.announce()
         if step.field:

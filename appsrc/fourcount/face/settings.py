@@ -1,4 +1,4 @@
-"""What the window remembers between starts: its size, the text size, light or dark. Nothing of any record."""
+"""What the window remembers between starts: its look, its choices, the names of files. Nothing of any record."""
 
 from __future__ import annotations
 
@@ -17,6 +17,8 @@ if TYPE_CHECKING:
 FOLDER_VARIABLE = "FOURCOUNT_SETTINGS_FOLDER"
 """An environment variable that names another folder for settings and log."""
 
+STATE_NAME = "state"
+
 
 def own_folder() -> Path:
     """The folder for settings and the log of errors; it is made when something is kept."""
@@ -24,11 +26,19 @@ def own_folder() -> Path:
     return Path(os.environ.get(FOLDER_VARIABLE) or Path(location) / "fourcount")
 
 
+def own_state_folder() -> Path:
+    """The folder for unsaved work and for which files are open, beside the settings where those are elsewhere."""
+    location = QStandardPaths.writableLocation(QStandardPaths.StandardLocation.GenericStateLocation)
+    elsewhere = os.environ.get(FOLDER_VARIABLE)
+    return Path(elsewhere) / STATE_NAME if elsewhere else Path(location) / "fourcount"
+
+
 class Settings:
     """An ini file in a folder; a folder that cannot be written is no trouble, things are just not remembered."""
 
-    def __init__(self, folder: Path) -> None:
+    def __init__(self, folder: Path, state_folder: Path | None = None) -> None:
         self.folder = folder
+        self.state_folder = state_folder or folder / STATE_NAME
         self._store = QSettings(str(folder / "window.ini"), QSettings.Format.IniFormat)
 
     def zoom(self) -> float:
@@ -67,6 +77,24 @@ class Settings:
         known = next((name for name in ICONS if name == icons), ICONS[0])
         kept = next((name for name in ARRANGEMENTS if name == arrangement != "bars"), ARRANGEMENTS[0])
         return known, kept  # bars are drawn on demand
+
+    def recent(self) -> list[str]:
+        """The paths of the files last opened, the newest first."""
+        value = self._store.value("recent", [])
+        entries = value if isinstance(value, list) else [value]  # a list of one is read as its one entry
+        return [entry for entry in entries if isinstance(entry, str) and entry and "\0" not in entry]
+
+    def keeps_recent(self) -> bool:
+        """Whether those names are remembered."""
+        return self._switch("keep_recent")
+
+    def sets_aside(self) -> bool:
+        """Whether unsaved work is set aside."""
+        return self._switch("set_aside")
+
+    def _switch(self, key: str) -> bool:
+        """On unless it was switched off."""
+        return str(self._store.value(key, "true")).lower() != "false"
 
     def keep(self, **values: object) -> None:
         """Remember values by name."""

@@ -3,7 +3,8 @@
 from __future__ import annotations
 
 from PySide6.QtCore import QSize, Qt
-from PySide6.QtWidgets import QLabel, QSizePolicy
+from PySide6.QtGui import QDragEnterEvent
+from PySide6.QtWidgets import QLabel, QLineEdit, QSizePolicy
 
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
@@ -20,6 +21,16 @@ def tip(text: str) -> str:
         return short
     plain = short.replace("&", "&amp;").replace("<", "&lt;").replace(">", "&gt;")
     return f"<qt>{plain}</qt>"
+
+
+class TextOnly(QLineEdit):
+    """A line that text can be dropped into, and no file: the window opens files."""
+
+    def dragEnterEvent(self, event: QDragEnterEvent) -> None:
+        if event.mimeData().hasUrls() and any(url.isLocalFile() for url in event.mimeData().urls()):
+            event.ignore()
+        else:
+            super().dragEnterEvent(event)
 
 
 class Words(QLabel):

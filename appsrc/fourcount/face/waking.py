@@ -4,15 +4,21 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
+from PySide6.QtGui import QAction
+from PySide6.QtWidgets import QMenu
+
 from fourcount.face import actions as commands_table
 from fourcount.face.checking import Checking
 from fourcount.face.collecting import Collecting
 from fourcount.face.commands import Commands
 from fourcount.face.cursor_keeper import CursorKeeper
+from fourcount.face.file_commands import FileCommands
+from fourcount.face.file_drops import FileDrops
 from fourcount.face.outcome_commands import OutcomeCommands
 from fourcount.face.outcomes_bar import OutcomesBar
 from fourcount.face.view_commands import ViewCommands
 from fourcount.picture.options import PictureOptions
+from fourcount.wording.keeping import KEEP_ASIDE
 
 if TYPE_CHECKING:
     from fourcount.face.later import Later
@@ -37,4 +43,17 @@ def wake(window: MainWindow, settings: Settings, later: Later) -> None:
     window.patient.wake(actions, menus["picture"], options)
     window.commands.figures = window.patient.figures
     window.view = ViewCommands(window)
+    window.files = FileCommands(window, settings)
+    window.keeps_aside = _set_aside_switch(menus["file"], actions["handout"], settings.sets_aside())
     window.header.take_bar(OutcomesBar(window.look, actions["outcome-add"], menus["outcomes"]))
+    FileDrops(window, window.files)
+
+
+def _set_aside_switch(menu: QMenu, before: QAction, on: bool) -> QAction:
+    """The switch under the commands that save."""
+    action = QAction(KEEP_ASIDE, menu)
+    action.setCheckable(True)
+    action.setChecked(on)
+    menu.insertAction(before, action)
+    menu.insertSeparator(before)
+    return action

@@ -6,11 +6,10 @@ from itertools import pairwise
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer, Signal
-from PySide6.QtGui import QActionGroup, QCloseEvent, QIcon, QKeyEvent, QPaintEvent, QResizeEvent
+from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QIcon, QKeyEvent, QPaintEvent, QResizeEvent
 from PySide6.QtWidgets import QApplication, QMainWindow, QVBoxLayout, QWidget
 
 from fourcount.face import actions as commands_table
-from fourcount.face import dialogs
 from fourcount.face.as_printed import AsPrinted
 from fourcount.face.cautions_strip import CautionsStrip
 from fourcount.face.columns import Page, PageScroll
@@ -21,6 +20,7 @@ from fourcount.face.look import Look
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
+from fourcount.record.entry.digits import specimen
 from fourcount.record.outcome import Outcome, Strata
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
@@ -32,6 +32,7 @@ if TYPE_CHECKING:
     from fourcount.face.collecting import Collecting
     from fourcount.face.commands import Commands
     from fourcount.face.cursor_keeper import CursorKeeper
+    from fourcount.face.file_commands import FileCommands
     from fourcount.face.outcome_commands import OutcomeCommands
     from fourcount.face.view_commands import ViewCommands
 
@@ -56,6 +57,9 @@ class MainWindow(QMainWindow):
     outcomes: OutcomeCommands
     view: ViewCommands
     drawing: tuple[QActionGroup, QActionGroup]
+    files: FileCommands
+    keeps_aside: QAction
+    wanted_file = ""
     checking: Checking | None = None
 
     def __init__(self, session: Session, look: Look, settings: Settings, later: Later) -> None:
@@ -145,7 +149,7 @@ class MainWindow(QMainWindow):
         do.paste_offered.connect(go.paste_offered)
         do.pasted.connect(go.paste_over)
         self.printed.layout_choice.chosen.connect(do.choose_layout)
-        self.printed.example_wanted.connect(do.open_example)
+        self.printed.example_wanted.connect(self.files.example)
         self.says.family_chosen.connect(do.choose_family)
         self.says.level_chosen.connect(do.choose_level)
         self.says.chosen.connect(do.choose)
@@ -160,12 +164,17 @@ class MainWindow(QMainWindow):
         self.drawing[1].triggered.connect(see.take_arrangement)
         among.begun.connect(go.to_outcome)
         among.told.connect(self._on_told)
+        self.keeps_aside.triggered.connect(self.files.switch_set_aside)
+        self.session.changed.connect(self.files.follow)
+        self.files.noticed.connect(self.header.tell)
+        self.files.noticed.connect(self.banner.hide)
+        self.files.failed.connect(self.banner.tell)
         do.noticed.connect(self.header.tell)
         do.noticed.connect(self.banner.hide)
         do.told.connect(self._on_told)
         self.session.focus_wanted.connect(go.focus_wanted)
         handlers = {
-            "new": do.new_table, "example": do.open_example, "quit": self.close, "undo": self.session.undo,
+            "new": self.files.new, "example": self.files.example, "quit": self.close, "undo": self.session.undo,
             "redo": self.session.redo, "copy-text": do.copy_text, "copy-table": do.copy_table,
             "copy-picture": do.copy_picture, "swap": do.swap_groups, "count-other": do.count_other_outcome,
             "paste": do.paste, "study": go.to_study, "form": go.to_form, "add-row": go.add_row,
@@ -177,7 +186,8 @@ class MainWindow(QMainWindow):
             "handout": see.handout, "curve": see.curve, "methods": see.methods, "keys": see.keys, "about": see.about,
             "outcome-add": among.add, "outcome-copy": among.copy, "outcome-next": among.next,
             "outcome-previous": among.previous, "outcome-left": among.move_left,
-            "outcome-right": among.move_right, "outcome-remove": among.remove,
+            "outcome-right": among.move_right, "outcome-remove": among.remove, "open": self.files.open,
+            "save": self.files.save, "save-as": self.files.save_as, "kept": self.files.kept,
         }  # fmt: skip
         for key, handler in handlers.items():
             self.actions_by_key[key].triggered.connect(handler)
@@ -211,8 +221,10 @@ class MainWindow(QMainWindow):
             self.header.bar.show_state(record, self.session.view)
             self.outcomes.show_enabled(self.actions_by_key)
             self.actions_by_key["curve"].setEnabled(self.patient.has_curve)
-        title = record.title_text.strip()
-        self.setWindowTitle(labels.TITLED_WINDOW.format(title=title) if title else labels.WINDOW_TITLE)
+        path = self.session.document.path
+        self.setWindowTitle(labels.window_title(specimen(path.name) if path else record.title_text))
+        self.setWindowFilePath(str(path or ""))
+        self.setWindowModified(self.session.unsaved)
         if self._shown is None or record is not self._shown[0] or self.session.view != self._shown[1]:
             self._shown = (record, self.session.view)
             self._end_notices()
@@ -268,24 +280,17 @@ class MainWindow(QMainWindow):
         self.patient.show_standing(self.cautions.narrow)
 
     def closeEvent(self, event: QCloseEvent) -> None:
-        if self._has_work() and not dialogs.may_discard(self):
+        if self.checking and not self.files.may_leave():
             event.ignore()
             return
         own = self.commands.own.choices if self.checking else self.session.record.choices
         self._settings.keep(geometry=self.saveGeometry(), zoom=self.look.zoom, appearance=self.look.appearance)
-        if self.header.bar:
+        if self.checking:
             self._settings.keep(**self.view.kept)
+            self.files.leave()
         self._settings.keep(family=own.family, level=own.level)
         self._later.close()
         super().closeEvent(event)
-
-    def _has_work(self) -> bool:
-        """Whether the window holds typed text that is not just the worked example."""
-        from fourcount.record import editing
-        from fourcount.wording.example import worked_example
-
-        record = self.session.record
-        return editing.with_choices(record, Choices()) not in (Record(), worked_example())
 
     # Slots
 
@@ -300,6 +305,14 @@ class MainWindow(QMainWindow):
         self.session.wake()
         self.commands.tell_unusual_choices()
         self._later.load()
+        self.files.begin(self.wanted_file)
+
+    def take_file(self, path: str) -> None:
+        """Open a file that the system hands over, once the window stands."""
+        if self.checking:
+            self.files.open_beside(path)
+        else:
+            self.wanted_file = path
 
     def _on_libraries_loaded(self) -> None:
         self.session.announce()

@@ -5,6 +5,7 @@ from __future__ import annotations
 import os
 import stat
 from pathlib import Path
+from typing import NamedTuple
 
 from fourcount.record.codec import LARGEST_FILE, decode
 from fourcount.record.entry.digits import specimen
@@ -12,8 +13,21 @@ from fourcount.record.paper import Record
 from fourcount.wording import refusals as words
 
 
+class Opened(NamedTuple):
+    """A record, and the bytes that it was read from."""
+
+    record: Record
+    data: bytes
+
+
 def read_file(path: str | os.PathLike[str]) -> Record | str:
-    """The record in a file, or one sentence that says why there is none. The file stays as it is.
+    """The record in a file, or one sentence that says why there is none."""
+    opened = open_file(path)
+    return opened if isinstance(opened, str) else opened.record
+
+
+def open_file(path: str | os.PathLike[str]) -> Opened | str:
+    """The record in a file with its bytes, or one sentence that says why there is none. The file stays as it is.
 
     Whatever the file holds, nothing is raised; of a huge one, no more is read than a record may have, and what is no
     ordinary file (a pipe, a device) is not waited for.
@@ -31,7 +45,7 @@ def read_file(path: str | os.PathLike[str]) -> Record | str:
     if isinstance(reason, bytes):
         record = decode(reason)
         if isinstance(record, Record):
-            return record
+            return Opened(record, reason)
         reason = _lowered(words.refusal_text(record))
     return words.CANNOT_BE_OPENED.format(name=specimen(Path(path).name or str(path)), reason=reason)
 

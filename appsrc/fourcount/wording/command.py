@@ -4,6 +4,7 @@ from __future__ import annotations
 
 HELP = """\
 fourcount                              open the window
+fourcount FILE                         open it on a record
 fourcount answer A B C D [options]     what the four counts of one table say
 fourcount answer FILE [--json]         the same for every outcome of a record
 fourcount handout FILE -o OUT          one page for a patient: .pdf .png .svg
@@ -66,6 +67,7 @@ OVERALL_AND_SHARE = "An overall risk and the share of people exposed are needed 
 ONE_LINE = "A margin and a difference that matters exclude each other: give one of them."
 NOT_CARRIED = "The effect cannot be {given} here; what can be carried is {allowed}."
 NO_SUCH_ARGUMENT = "answer() has no argument {name}"
+ONE_RECORD = "One record at a time can be opened."
 ONLY_JSON = "A file has choices of its own: only --json fits it, not {option}."
 FIELDS = {
     "starting_risk_text": "baseline",

@@ -118,8 +118,10 @@ CELL_NAMES = {
 LIMITS = "limits"
 
 INTERVAL_HEAD = "{level} interval"
-WINDOW_TITLE = "Fourcount"
-TITLED_WINDOW = "{title} · Fourcount"
+WINDOW_TITLE = "Fourcount[*]"
+TITLED_WINDOW = "{title}[*] · Fourcount"
+"""The star in brackets stands for the platform's mark of unsaved work."""
+
 FIRST_STEP = "New here? See an invented example"
 PATIENT_WAITS = "The picture appears once the four counts are there."
 PATIENT_WAITS_OTHERWISE = "What follows for a patient appears once the table is whole."
@@ -205,13 +207,6 @@ STUDY_FOLLOWED = "The study is now a {study}."
 FORM_FOLLOWED = "Printed as is now: {specimen}, {note}."
 OWN_RISK_SOURCE = "this study’s reference group"
 
-CLOSE_TITLE = "Close Fourcount?"
-CLOSE_QUESTION = (
-    "This version keeps no file. Closing the window discards what was typed; copy the figures first if you need them."
-)
-CLOSE_YES = "Discard and close"
-CLOSE_NO = "Keep working"
-
 LEVEL_TITLE = "Confidence level"
 LEVEL_QUESTION = "A level from 80% to 99.9%:"
 
@@ -234,7 +229,7 @@ KEYS_MORE = (
 ABOUT = (
     "Fourcount {version}",
     "Re-enter what a paper prints, see whether it adds up, what it says, and what that means for one patient.",
-    "Free software under the MIT licence. It works offline, sends nothing, and keeps no file.",
+    "Free software under the MIT licence. It works offline and sends nothing; what it keeps is said in the help.",
     (
         "Text in the system’s font {font}; computed with numpy {numpy} and scipy {scipy}; drawn with Qt {qt} and "
         "matplotlib {matplotlib}."
@@ -248,3 +243,9 @@ HELP_LIMITS = "What this program leaves out, and what it is for"
 NO_KEYS = "menu only"
 
 MISSING = "Still to be named: {names}."
+
+
+def window_title(name: str) -> str:
+    """The window's title for a file's name or a paper's title; a star in brackets of the name's own is shown as it is."""
+    shown = " ".join(name.split()).replace("[*]", "[*][*]")
+    return TITLED_WINDOW.format(title=shown) if shown else WINDOW_TITLE
