@@ -13,13 +13,15 @@ from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QApplication, QComboBox, QWidget
 from pytestqt.qtbot import QtBot
 
-from fourcount.face import dialogs
+from fourcount.face import keeping_dialogs
 from fourcount.face.application import make_application, make_window
 from fourcount.face.later import Later
 from fourcount.face.measure_row import MeasureRow
 from fourcount.face.window import MainWindow
 from fourcount.record.outcome import CELLS, Form
 from fourcount.record.paper import Record
+from fourcount.wording.example import worked_example
+from kept import Answers, bytes_of
 from printed_forms import TYPED
 
 EXAMPLE_COUNTS = ("38", "374", "70", "339")
@@ -167,7 +169,7 @@ def folder(tmp_path: Path) -> Path:
 @pytest.fixture
 def open_window(qtbot: QtBot, folder: Path, monkeypatch: pytest.MonkeyPatch) -> Iterator[Callable[..., MainWindow]]:
     """Open a window and wait until it has painted; it is closed at the end without a question."""
-    monkeypatch.setattr(dialogs, "may_discard", lambda parent: True)
+    monkeypatch.setattr(keeping_dialogs, "ask_losing", lambda parent, name: "discard")
     workers: list[Later] = []
 
     def make(record: Record | None = None) -> MainWindow:
@@ -209,3 +211,23 @@ def example(hands: Hands) -> Hands:
     """Hands at a window with the four counts of the worked example typed, and nothing else."""
     hands.count(*EXAMPLE_COUNTS)
     return hands
+
+
+@pytest.fixture
+def answers(open_window: Callable[..., MainWindow], monkeypatch: pytest.MonkeyPatch) -> Iterator[Answers]:
+    """Answers instead of questions; at the end everything may be discarded."""
+    given = Answers()
+    for name in ("ask_losing", "ask_over", "ask_replace"):
+        monkeypatch.setattr(keeping_dialogs, name, getattr(given, name))
+    for name in ("ask_open_path", "ask_save_path"):
+        monkeypatch.setattr(keeping_dialogs, name, given.ask_path)
+    yield given
+    given.losing = "discard"
+
+
+@pytest.fixture
+def paper(tmp_path: Path) -> Path:
+    """A file that holds the worked example."""
+    path = tmp_path / "paper.fourcount"
+    path.write_bytes(bytes_of(worked_example()))
+    return path

@@ -6,7 +6,7 @@ from typing import TYPE_CHECKING
 
 import pytest
 
-from fourcount.face import dialogs
+from fourcount.face import keeping_dialogs
 
 if TYPE_CHECKING:
     from conftest import Hands
@@ -16,9 +16,9 @@ if TYPE_CHECKING:
 def asked(hands: Hands, monkeypatch: pytest.MonkeyPatch) -> list[bool]:
     """How often closing was asked about; the answer is to keep working."""
     questions: list[bool] = []
-    monkeypatch.setattr(dialogs, "may_discard", lambda parent: bool(questions.append(True)))
+    monkeypatch.setattr(keeping_dialogs, "ask_losing", lambda parent, name: questions.append(True) or "cancel")
     yield questions
-    monkeypatch.setattr(dialogs, "may_discard", lambda parent: True)
+    monkeypatch.setattr(keeping_dialogs, "ask_losing", lambda parent, name: "discard")
 
 
 def test_an_empty_window_closes_at_once(hands: Hands, asked: list[bool]) -> None:
@@ -87,6 +87,6 @@ def test_a_changed_example_is_asked_about(hands: Hands, asked: list[bool]) -> No
 def test_the_answer_yes_closes(hands: Hands, asked: list[bool], monkeypatch: pytest.MonkeyPatch) -> None:
     """Discarding is possible, once it was asked for."""
     hands.type("38")
-    monkeypatch.setattr(dialogs, "may_discard", lambda parent: True)
+    monkeypatch.setattr(keeping_dialogs, "ask_losing", lambda parent, name: "discard")
     hands.do("quit")
     assert not hands.window.isVisible()

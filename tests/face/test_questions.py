@@ -10,7 +10,8 @@ from PySide6.QtCore import Qt, QTimer
 from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QApplication, QDialog, QInputDialog, QLineEdit, QMessageBox, QPushButton
 
-from fourcount.face.dialogs import ask_level, may_discard
+from fourcount.face.dialogs import ask_level
+from fourcount.face.keeping_dialogs import ask_losing
 from fourcount.wording import labels
 
 if TYPE_CHECKING:
@@ -41,34 +42,36 @@ def button(question: QDialog, words: str) -> QPushButton:
     return next(each for each in question.findChildren(QPushButton) if each.text().replace("&", "") == words)
 
 
-@pytest.mark.parametrize(("words", "answer"), [(labels.CLOSE_YES, True), (labels.CLOSE_NO, False)])
-def test_discarding_is_a_button_of_its_own(
-    hands: Hands, answering: Callable[..., None], words: str, answer: bool
-) -> None:
-    """Each answer is said in words, and only one of them discards."""
+ANSWERS = (("Save", "save"), ("Discard", "discard"), ("Cancel", "cancel"))
+
+
+@pytest.mark.parametrize(("words", "answer"), ANSWERS)
+def test_losing_work_has_three_answers(hands: Hands, answering: Callable[..., None], words: str, answer: str) -> None:
+    """Each is a button of its own, in the words that people know."""
     answering(lambda question: QTest.mouseClick(button(question, words), Qt.MouseButton.LeftButton))
-    assert may_discard(hands.window) is answer
+    assert ask_losing(hands.window, "“a.fourcount”") == answer
 
 
-@pytest.mark.parametrize("key", [Qt.Key.Key_Escape, Qt.Key.Key_Return])
-def test_a_hasty_key_keeps_the_work(hands: Hands, answering: Callable[..., None], key: Qt.Key) -> None:
+@pytest.mark.parametrize(("key", "answer"), [(Qt.Key.Key_Escape, "cancel"), (Qt.Key.Key_Return, "save")])
+def test_a_hasty_key_keeps_the_work(hands: Hands, answering: Callable[..., None], key: Qt.Key, answer: str) -> None:
     """Neither Escape nor Enter discards what was typed."""
     answering(lambda question: QTest.keyClick(question, key))
-    assert may_discard(hands.window) is False
+    assert ask_losing(hands.window, "“a.fourcount”") == answer
 
 
 def test_the_question_says_what_would_be_lost(hands: Hands, answering: Callable[..., None]) -> None:
-    """It is one plain sentence on what closing does and what can be done first."""
+    """It names the record as it is called, and renders none of it."""
     said: list[str] = []
 
     def answer(question: QDialog) -> None:
         assert isinstance(question, QMessageBox)
+        assert question.textFormat() == Qt.TextFormat.PlainText
         said.append(question.text())
         question.reject()
 
     answering(answer)
-    may_discard(hands.window)
-    assert said == [labels.CLOSE_QUESTION]
+    ask_losing(hands.window, "<b>bold</b>")
+    assert said == ["Save the changes to <b>bold</b>?"]
 
 
 def test_a_level_is_typed_over_the_old_one(hands: Hands, answering: Callable[..., None]) -> None:

@@ -267,10 +267,10 @@ def test_title_and_source_are_the_papers_own(hands: Hands) -> None:
     """The title names the window; the source line is kept."""
     hands.write(hands.window.header.title, "A trial of lamps")
     hands.write(hands.window.header.source, "table 2")
-    assert hands.window.windowTitle() == "A trial of lamps · Fourcount"
+    assert hands.window.windowTitle() == "A trial of lamps[*] · Fourcount"
     assert hands.window.session.record.source_text == "table 2"
     hands.write(hands.window.header.title, "")
-    assert hands.window.windowTitle() == "Fourcount"
+    assert hands.window.windowTitle() == "Fourcount[*]"
 
 
 def test_text_is_never_taken_for_markup(example: Hands) -> None:

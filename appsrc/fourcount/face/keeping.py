@@ -47,7 +47,7 @@ class Keeping(QObject):
     def __init__(self, session: Session, parent: QObject) -> None:
         super().__init__(parent)
         self._session = session
-        self._told = ""
+        self._told: str | None = None
         self._watcher = QFileSystemWatcher(self)
         self._settling = QTimer(self)
         self._settling.setSingleShot(True)
@@ -66,7 +66,7 @@ class Keeping(QObject):
         opened = open_file(path)
         if isinstance(opened, str):
             return opened
-        self._told = ""
+        self._told = None
         self._session.begin(opened.record, Document(opened.record, path, digest_of(opened.data)))
         return ""
 
@@ -86,7 +86,8 @@ class Keeping(QObject):
             return Written(reason=self._sentence(path, written.reason))
         if written.digest:
             document.path, document.digest, document.saved = path, written.digest, record
-            self._told = ""
+            self._told = None
+            self._session.end_run()
             self._follow()
             self._session.announce()
         return written
@@ -99,7 +100,7 @@ class Keeping(QObject):
         self._follow()
         now = digest_at(document.path)
         if now == document.digest:
-            self._told = ""
+            self._told = None
         elif now != self._told:
             self._told = now
             pattern = words.CHANGED_ELSEWHERE if now else words.GONE

@@ -10,6 +10,7 @@ from PySide6.QtWidgets import QWidget
 from fourcount.face.errors import LOG_NAME
 from fourcount.face.help_window import HelpWindow
 from fourcount.wording import keeping as words
+from fourcount.wording.kept import KEPT
 
 if TYPE_CHECKING:
     from fourcount.face.help_window import Part
@@ -27,7 +28,7 @@ def kept_window(look: Look, parent: QWidget, settings: Settings, aside: Path) ->
         "recent": words.RECENT_MENU.replace("&", ""),
     }
     parts: list[Part] = []
-    for heading, paragraphs in words.KEPT:
+    for heading, paragraphs in KEPT.items():
         parts.append(("strong", heading))
         parts.extend(("body", paragraph.format(**facts)) for paragraph in paragraphs)
     window = HelpWindow(look, words.KEPT_TITLE, parent)

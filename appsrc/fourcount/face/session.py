@@ -119,9 +119,9 @@ class Session(QObject):
             self._run = field
         self._take(record)
 
-    def end_run(self, field: str) -> None:
-        """Close the run of typing in a field that lost focus."""
-        if self._run == field:
+    def end_run(self, field: str | None = None) -> None:
+        """Close the run of typing in a field that lost focus, or any run, since the record is saved as it is now."""
+        if field is None or self._run == field:
             self._run = ""
 
     def change_outcome(self, outcome: Outcome) -> None:

@@ -246,6 +246,6 @@ MISSING = "Still to be named: {names}."
 
 
 def window_title(name: str) -> str:
-    """The window's title for a file's name or a paper's title; a star in brackets of the name's own is shown as it is."""
+    """The window's title for a file's name or a paper's title, in which nothing stands for the mark."""
     shown = " ".join(name.split()).replace("[*]", "[*][*]")
     return TITLED_WINDOW.format(title=shown) if shown else WINDOW_TITLE
