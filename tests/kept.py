@@ -55,3 +55,10 @@ def marked(hands: Hands) -> bool:
 def save_as(hands: Hands, answers: Answers, path: Path) -> None:
     answers.path = str(path)
     hands.window.actions_by_key["save-as"].trigger()
+
+
+def change(path: Path) -> bytes:
+    """Somebody else writes the file."""
+    data = bytes_of(Record(title_text="Somebody else’s"))
+    path.write_bytes(data)
+    return data

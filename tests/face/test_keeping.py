@@ -10,10 +10,9 @@ import pytest
 
 from fourcount.face.keeping import with_suffix
 from fourcount.publish.files import read_file
-from fourcount.record.paper import Record
 from fourcount.wording import keeping as words
 from fourcount.wording.example import worked_example
-from kept import Answers, bytes_of, marked, save_as, told
+from kept import Answers, change, marked, save_as, told
 
 if TYPE_CHECKING:
     from conftest import Hands
@@ -147,13 +146,6 @@ def test_a_title_makes_a_name(example: Hands, answers: Answers) -> None:
     example.write(example.window.header.title, "Lamps: a/b <trial>?")
     example.do("save")
     assert Path(answers.suggested).name == "Lamps a b trial.fourcount"
-
-
-def change(path: Path) -> bytes:
-    """Somebody else writes the file."""
-    data = bytes_of(Record(title_text="Somebody else’s"))
-    path.write_bytes(data)
-    return data
 
 
 def test_a_change_by_somebody_else_is_not_written_over(hands: Hands, answers: Answers, paper: Path) -> None:
