@@ -112,10 +112,10 @@ class FileCommands(QObject):
             self.recent.forget(wanted)
             self.failed.emit(sentence)
             return
-        self._settled_in(wanted)
         self._window.commands.own.bring(self._session.record.choices)
         self._window.commands.cell_wanted.emit()
         self.noticed.emit(words.OPENED.format(name=named(wanted)))
+        self._settled_in(wanted)
 
     def open_beside(self, path: str) -> None:
         """Open a file that the system hands over: here while nothing has begun, else in a window of its own."""
@@ -186,8 +186,8 @@ class FileCommands(QObject):
         if written.reason:
             self.failed.emit(written.reason)
             return False
-        self._settled_in(path)
         self.noticed.emit(words.SAVED.format(name=named(path)))
+        self._settled_in(path)
         return True
 
     def _settled_in(self, path: Path) -> None:

@@ -35,8 +35,7 @@ class Recent(QMenu):
         self.keeps.setCheckable(True)
         self.keeps.setChecked(settings.keeps_recent())
         self.clears = QAction(words.CLEAR_RECENT, self)
-        self.keeps.triggered.connect(self._on_switched)
-        self.clears.triggered.connect(self.forget_all)
+        # An action that leaves a menu loses what connects it to that menu itself, so its own signals are not used.
         self.triggered.connect(self._on_triggered)
         menu.insertMenu(before, self)
         self._show()
@@ -66,7 +65,11 @@ class Recent(QMenu):
             self.forget_all()
 
     def _on_triggered(self, action: QAction) -> None:
-        if action.data():
+        if action is self.clears:
+            self.forget_all()
+        elif action is self.keeps:
+            self._on_switched(action.isChecked())
+        elif action.data():
             self.chosen.emit(action.data())
 
     def _take(self, paths: list[Path]) -> None:
