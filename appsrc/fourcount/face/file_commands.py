@@ -46,6 +46,7 @@ class FileCommands(QObject):
         self.recent = Recent(settings, window.menus["file"], window.actions_by_key["example"])
         self._open = settings.state_folder / OPEN_NAME
         self._settings = settings
+        self._left = False
         self.open_files = OpenFiles(self._open, self)
         self.recent.chosen.connect(self.open_path)
         self.keeping.changed_elsewhere.connect(self.failed)
@@ -162,6 +163,7 @@ class FileCommands(QObject):
 
     def leave(self) -> None:
         """The window closes as usual: nothing of this record is left but its file."""
+        self._left = True
         self.set_aside.drop()
         self.open_files.release()
 
@@ -171,7 +173,7 @@ class FileCommands(QObject):
 
     def follow(self) -> None:
         """Hold the file of the record in view, which an undo can change."""
-        if self.keeping.path != self.open_files.held:
+        if not self._left and self.keeping.path != self.open_files.held:
             self.open_files.hold(self.keeping.path)
 
     def _save(self, path: Path) -> bool:

@@ -38,6 +38,7 @@ class OpenFiles(QObject):
         super().__init__(parent)
         self._folder = folder
         self._held: Path | None = None
+        self._shared = False
         self._lock: QLockFile | None = None
         self._wish: Path | None = None
         self._watcher = QFileSystemWatcher(self)
@@ -51,7 +52,7 @@ class OpenFiles(QObject):
     def hold(self, path: Path | None) -> bool:
         """Say that this window has a file open and no other one; False where another window holds it already."""
         if path == self._held:
-            return self._lock is not None or path is None
+            return not self._shared
         self.release()
         self._held = path
         if path is None:
@@ -60,7 +61,8 @@ class OpenFiles(QObject):
             self._folder.mkdir(mode=0o700, parents=True, exist_ok=True)
         lock = _lock(self._folder, path)
         if not lock.tryLock(0):
-            return lock.error() != QLockFile.LockError.LockFailedError
+            self._shared = lock.error() == QLockFile.LockError.LockFailedError
+            return not self._shared
         self._lock, self._wish = lock, _wish(self._folder, path)
         with suppress(OSError):
             self._wish.unlink(missing_ok=True)
@@ -73,6 +75,7 @@ class OpenFiles(QObject):
         if self._lock is not None:
             self._lock.unlock()
         self._held = self._lock = self._wish = None
+        self._shared = False
 
     def _on_folder_changed(self, _folder: str) -> None:
         if self._wish is None or not self._wish.exists():
