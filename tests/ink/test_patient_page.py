@@ -13,7 +13,7 @@ from fourcount.ink.plain_picture import Shown, picture_words, shown
 from fourcount.picture.options import USUAL
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from patient_outcomes import AT_TWELVE, CASE_CONTROL, HAZARD, LONG, SHOWN, TINY, TRIAL, WELCOME
+from patient_outcomes import AT_TWELVE, CASE_CONTROL, HAZARD, LONG, SHOWN, SMALL, TINY, TRIAL, WELCOME
 
 ROOMS = [(1280, 740), (1024, 640), (800, 560), (1920, 1020), (480, 360)]
 
@@ -116,6 +116,17 @@ def test_one_array_says_what_it_shows_of_both_groups() -> None:
     assert key["affected"] == "fall at least once, with both"
     assert key["others"] == "do not fall, with both"
     assert {entry.text for entry in picture_words(it).key} >= {"fall at least once", "do not fall"}
+
+
+@pytest.mark.parametrize(
+    ("outcome", "said"), [(TRIAL, "Each figure is one person."), (SMALL, "Each mark is one person.")]
+)
+def test_what_an_icon_stands_for_is_said_as_it_is_drawn(outcome: Outcome, said: str) -> None:
+    """A hundred are figures, a thousand marks, whichever icons were chosen."""
+    page = PatientPage(ready(outcome))
+    style = page.style(1280, 740)
+    said_above = [run.text for runs, _ in page._above(style) for run in runs]
+    assert said in said_above
 
 
 def test_what_is_too_small_to_draw_speaks_of_whole_people() -> None:

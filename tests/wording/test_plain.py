@@ -217,6 +217,7 @@ def test_the_key_has_the_number_of_the_sentence(say: Callable[..., PlainWords]) 
     assert say(AT_TWELVE).avoided == "the 6 fewer who fall at least once"
     assert say(HARM).added == "the 10 more who bleed"
     assert say(LONG).avoided == "the 8 fewer"
+    assert say(replace(TRIAL, patient=Patient(starting_risk_text="2%"))).avoided == "the 1 fewer"
 
 
 @pytest.mark.parametrize(

@@ -17,7 +17,7 @@ from fourcount.wording import plain_texts
 GAP = 24
 """Room between the people and the words beside them, at 100%."""
 
-BESIDE = 0.66
+BESIDE = 0.68
 """The share of the width that the people get where words stand beside them."""
 
 PARAGRAPH = 4

@@ -39,7 +39,7 @@ class PatientPage:
     def __init__(self, it: Shown) -> None:
         self._words = it.words
         self._drawn = it.plan.denominator is not None and it.options.arrangement != "bars"
-        self._icons = it.options.icons
+        self._persons = it.options.icons == "person" and it.plan.denominator == 100  # larger crowds are marks
         self._range = it.options.uncertainty
         self._picture = PlainPicture(it)
 
@@ -75,23 +75,26 @@ class PatientPage:
         painter.fillRect(QRectF(0, 0, width, height), QColor(style.palette.page))
         x, y, wide = style.px(MARGIN), float(style.px(20)), self._wide(style, width)
         room = max(height - self._text_height(style, wide), self._picture.least_height(style, wide))
-        for runs, gap in self._above(style, wide):
+        for runs, gap in self._above(style):
             y += draw_paragraph(painter, x, y, wide, runs) + gap
         y += self._picture.draw(painter, style, x, y, wide, room) + style.px(14)
         for runs, gap in self._below(style, wide):
             y += draw_paragraph(painter, x, y, wide, runs) + gap
 
     def _text_height(self, style: PaperStyle, wide: float) -> float:
-        paragraphs = (*self._above(style, wide), *self._below(style, wide))
+        paragraphs = (*self._above(style), *self._below(style, wide))
         return sum(paragraph_height(runs, wide) + gap for runs, gap in paragraphs) + style.px(20 + 14)
 
-    def _above(self, style: PaperStyle, wide: float) -> list[Spaced]:
+    def _above(self, style: PaperStyle) -> list[Spaced]:
         words, ink, muted, body = self._words, style.palette.ink, style.palette.muted, style.font("body")
-        each = {"person": plain_texts.EACH_FIGURE}.get(self._icons, plain_texts.EACH_MARK) if self._drawn else ""
+        each = plain_texts.EACH_FIGURE if self._persons else plain_texts.EACH_MARK
         turned = words.turned if self._drawn else ""
         return [
             ([Run(words.title, style.font("estimate"), ink)], style.px(3)),
-            ([Run(each, body, muted), Run(words.lead, body, muted), Run(turned, body, ink)], style.px(14)),
+            (
+                [Run(each if self._drawn else "", body, muted), Run(words.lead, body, muted), Run(turned, body, ink)],
+                style.px(14),
+            ),
         ]
 
     def _below(self, style: PaperStyle, wide: float) -> list[Spaced]:

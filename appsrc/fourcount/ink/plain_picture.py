@@ -24,8 +24,8 @@ from fourcount.wording.plain_outcome import PlainSide, PlainWords, plain_words
 from fourcount.wording.plain_refusal import why_not
 from fourcount.wording.plain_risks import plain_risks
 
-LEAST_ARRAY, GOOD_ARRAY = 110, 205
-"""How high an array is at least, and where there is room, at 100%: a hundred people of some 11 and 20 pixels."""
+LEAST_ARRAY, GOOD_ARRAY = 140, 205
+"""How high an array is at least, and where there is room, at 100%: a hundred people of some 14 and 20 pixels."""
 
 FIGURE_SIZES = (1.0, 0.95, 0.9, 0.85, 0.8)
 """Parts of the usual size at which a count may be set to stay on one line."""

@@ -17,6 +17,9 @@ from fourcount.wording.plain_groups import group_phrase, group_title
 from fourcount.wording.plain_risks import PlainRisks, people_in_text, plain_risks
 from fourcount.wording.subject import subject
 
+ONE = "1"
+"""Of one person the event would have to be said in another form of its verb."""
+
 
 class PlainSide(NamedTuple):
     """One group: "With usual care", "12 in 100", "(12%)", "fall", "88 in 100 do not"."""
@@ -180,7 +183,8 @@ def _summary(change: Change, index: str) -> str:
 
 def _changed(change: Change) -> str:
     """What the key calls the people between both groups: the very number of the summary."""
-    pattern = plain_texts.CHANGED if len(change.event) <= plain_texts.LONGEST_KEY else plain_texts.CHANGED_ALONE
+    short = len(change.event) > plain_texts.LONGEST_KEY or change.number == ONE
+    pattern = plain_texts.CHANGED_ALONE if short else plain_texts.CHANGED
     return pattern.format(number=change.number, side=change.way, event=change.event)
 
 
