@@ -77,14 +77,16 @@ def test_baseline_uncertain_not_without_a_range(facts):
 @pytest.mark.parametrize("design", ["trial", "cohort", "survey", "case-control"])
 @pytest.mark.parametrize("baseline", ["", "12%"])
 def test_totals_are_sampled_in_a_case_control_study_only(facts, design, baseline):
-    """There the totals are those of cases and controls, whatever is typed beside them."""
-    assert (design == "case-control") == ("totals-are-sampled" in facts(*TABLE, design=design, baseline=baseline))
+    """There the totals are those of cases and controls; with a starting risk, what all rests on says so."""
+    found = facts(*TABLE, design=design, baseline=baseline)
+    told = "totals-are-sampled" in found, any("totals" in one for one in found.get("rests-on-baseline", ()))
+    assert told == (design == "case-control" and not baseline, design == "case-control" and bool(baseline))
 
 
 def test_a_case_control_study_with_a_starting_risk_rests_on_it(facts):
     """Every absolute figure rests on the typed risk, and the controls' sampling decides what the ratio is."""
     found = facts(*TABLE, design="case-control", baseline="12%")
-    assert found["rests-on-baseline"] == [{"baseline": 0.12, "effect": "odds_ratio"}]
+    assert found["rests-on-baseline"] == [{"baseline": 0.12, "effect": "odds_ratio", "totals": "sampled"}]
     assert found["controls-over-time"] == [{}]
 
 

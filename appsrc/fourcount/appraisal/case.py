@@ -76,6 +76,12 @@ class Case:
         return self.patient
 
 
+def at_start(carried: PatientFindings) -> Facts:
+    """The starting risk, and where it comes from unless it was typed: a computed one has other digits."""
+    facts: Facts = {"baseline": carried.baseline}
+    return facts if carried.start_from == "typed" else {**facts, "start": carried.start_from}
+
+
 def straddles(interval: Interval | Range | Gap, no_effect: float) -> bool | None:
     """Whether no effect lies strictly inside the interval; None where the interval does not tell.
 

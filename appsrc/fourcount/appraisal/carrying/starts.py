@@ -86,12 +86,6 @@ def starts_of(
     return Starts(usual=usual, low=low, high=high)
 
 
-def typed_value(reading: StartReading) -> float | None:
-    """The typed risk of the chosen kind, whichever it is; None where none can be read."""
-    typed = reading.overall if isinstance(reading.overall, Proportion) else reading.usual
-    return typed.value if isinstance(typed, Proportion | RiskReading) else None
-
-
 def _usual(reading: RiskReading | Blank | Unreadable, own: float | Gap | None, needs: str, rank: Rank) -> Start | Gap:
     if isinstance(reading, Unreadable):
         return UNREADABLE

@@ -6,7 +6,7 @@ from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
 from fourcount.appraisal.carrying.effects import of_print
 from fourcount.appraisal.carrying.study import Study
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
+from fourcount.appraisal.extras.e_values import e_values
 from fourcount.appraisal.extras.of_ratio import outcome_is_common
 from fourcount.appraisal.extras.printed import (
     DIFFERENCES,
@@ -30,7 +30,7 @@ from fourcount.appraisal.findings import (
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
 from fourcount.appraisal.forms.whole import line_of, whole
-from fourcount.appraisal.gating import SUPPORT, withheld_of_effects
+from fourcount.appraisal.gating import OBSERVATIONAL, SUPPORT, withheld_of_effects
 from fourcount.appraisal.postponing import Pace
 from fourcount.appraisal.turning import oriented_effect
 from fourcount.record.entry.starts import read_start
