@@ -3,13 +3,16 @@
 from __future__ import annotations
 
 from fourcount.record.entry.readings import Mark, Unreadable
-from fourcount.record.outcome import Form
 from fourcount.stats.results import Gap
 from fourcount.wording.facts import told
 from fourcount.wording.marks import MARK_TEXTS
 
-__all__ = ["GAP_TEXTS", "LIMIT_TEXTS", "MARK_TEXTS", "gap_text", "limit_text", "mark_text", "why_no_patient"]
+__all__ = ["GAP_TEXTS", "LIMIT_TEXTS", "MARK_TEXTS", "gap_text", "limit_text", "mark_text"]
 
+NO_EXACT = (
+    "Counts divided by a design effect are not whole, and exact methods take whole counts only; the score family gives "
+    "this figure."
+)
 GAP_TEXTS = {
     # the numbers themselves
     "empty-table": "There is nobody in either group.",
@@ -38,8 +41,7 @@ GAP_TEXTS = {
     "zero-count": "One of the two counts compared is 0, where the bare formula has no interval; "
     "the score family gives one.",
     "cluster-below-one": "A cluster holds one person at least.",
-    "not-whole": "Counts divided by a design effect are not whole, and exact methods take whole counts only; "
-    "the score family gives this figure.",
+    "not-whole": NO_EXACT,
     "too-few-left": "Divided by the design effect, no more than one person is left, so nothing can be told.",
     "ratio-below-one": "The group exposed fared better, so there is no share of events that the exposure explains.",
     "ratio-above-one": "The group exposed fared worse, so there is no share of events that the exposure prevents.",
@@ -69,8 +71,7 @@ GAP_TEXTS = {
     "narrow: an intracluster correlation from 0 to 1 is needed.",
     "cluster-size-missing": "Type the mean size of a cluster: the intracluster correlation alone does not say "
     "how much the intervals widen.",
-    "cluster-no-exact": "Counts divided by a design effect are not whole, and exact methods take whole counts only; "
-    "the score family gives this figure.",
+    "cluster-no-exact": NO_EXACT,
     "effect-unreadable": "The printed effect cannot be read; “0.54 (0.37 to 0.78)” would do.",
     "effect-not-typed": "Type the printed effect with its limits, such as 0.54 (0.37 to 0.78).",
     "no-interval-printed": "The paper gives neither limits nor an exact p to rebuild them from.",
@@ -143,11 +144,6 @@ UNKNOWN_MARK = "{text}: this cannot be read"
 def gap_text(gap: Gap) -> str:
     """One sentence that says why a figure is not given, and what would help where something would."""
     return told(GAP_TEXTS.get(gap.key, UNKNOWN_GAP), gap.facts)
-
-
-def why_no_patient(gap: Gap, form: Form, measure: str) -> str:  # noqa: ARG001
-    """Why nothing is carried to one patient."""
-    return gap_text(gap)
 
 
 def limit_text(gap: Gap) -> str:

@@ -6,7 +6,7 @@ from fourcount.appraisal.findings import Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.wording import carried, plain, plain_texts
 from fourcount.wording.form import lacking
-from fourcount.wording.gaps import gap_text, why_no_patient
+from fourcount.wording.gaps import gap_text
 from fourcount.wording.patient import missing
 from fourcount.wording.subject import subject
 
@@ -21,7 +21,7 @@ def why_not(outcome: Outcome, findings: OutcomeFindings) -> str:
         return plain_texts.MISSING.format(items=_listed(lacks))
     patient = findings.patient
     if isinstance(patient, Gap):
-        return why_no_patient(lacking(findings) or patient, findings.form, next(iter(findings.measures), ""))
+        return gap_text(lacking(findings) or patient)
     if isinstance(patient.with_.estimate, Gap):
         return carried.reason(patient.with_.estimate, patient, findings)
     return gap_text(patient.without.estimate) if isinstance(patient.without.estimate, Gap) else ""
