@@ -36,6 +36,17 @@ def no_effect_of(measure: str) -> float:
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
+class ForTheReader:
+    """What hangs on what the reader typed beside the table: a patient, and a line of their own."""
+
+    conversion: Conversion | Gap
+    patient: PatientFindings | Gap
+    carriable: tuple[Carriable, ...] = ()
+    line: OwnLine | Gap | None = None
+    marks: tuple[Mark, ...] = ()
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
 class Case:
     """One outcome with the figures that its form and its design support.
 
@@ -48,14 +59,15 @@ class Case:
     choices: Choices
     figures: Figures
     test: Probability | Gap
-    conversion: Conversion | Gap
-    patient: PatientFindings | Gap
+    reader: ForTheReader
     marks: tuple[Mark, ...] = ()
     extras: Extras = field(default_factory=Extras)
     strata: StrataFindings | Gap | None = None
     randomised: tuple[Randomised, ...] = ()
-    carriable: tuple[Carriable, ...] = ()
-    line: OwnLine | Gap | None = None
+
+    @property
+    def patient(self) -> PatientFindings | Gap:
+        return self.reader.patient
 
     @property
     def counts(self) -> Counts:

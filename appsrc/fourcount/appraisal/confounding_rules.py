@@ -41,7 +41,7 @@ def crude_beside_adjusted(case: Case) -> Facts | None:
     if printed.unit != "one":
         facts["print_unit"] = printed.unit
     carried = _crude_carried(case)
-    if carried and any(one.adjusted for one in case.carriable):
+    if carried and any(one.adjusted for one in case.reader.carriable):
         carried["carriable"] = "adjusted"
     return {**facts, **_strata(case), **carried}
 

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
+from fourcount.appraisal.carrying.carry import marks_of
 from fourcount.appraisal.carrying.effects import of_print
 from fourcount.appraisal.carrying.study import Study
 from fourcount.appraisal.case import Case
@@ -29,7 +29,7 @@ from fourcount.appraisal.findings import (
     Recovered,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import line_of, whole
+from fourcount.appraisal.forms.whole import for_the_reader, whole
 from fourcount.appraisal.gating import OBSERVATIONAL, SUPPORT, withheld_of_effects
 from fourcount.appraisal.postponing import Pace
 from fourcount.appraisal.turning import oriented_effect
@@ -58,10 +58,8 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         return nothing_yet(figure, form="effect-only", measures=(printed.measure,), marks=marks, given=printed)
     figure, recovered = _with_interval(figure, printed)
     study = _study(printed, figure, outcome)
-    carried = for_a_patient(study, typed)
     p = recovered if isinstance(recovered, Gap) else recovered.p
     figures: dict[str, Figure] = {printed.measure: figure}
-    line, line_marks = line_of(outcome, figures, None, level_of(printed))
     case = Case(
         outcome=outcome,
         form="effect-only",
@@ -69,12 +67,9 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         choices=choices,
         figures=figures,
         test=Probability(p=p, method=RECOVERED),
-        conversion=carried.conversion,
-        patient=carried.patient,
-        marks=marks + carried.marks + line_marks,
+        reader=for_the_reader(study, typed, figures, level_of(printed)),
+        marks=marks,
         extras=Extras(e_value=_e_value(printed, figure, outcome), recovered=recovered),
-        carriable=study.carriable,
-        line=line,
     )
     return whole(case, figures)
 
