@@ -43,10 +43,6 @@ class CursorKeeper(QObject):
         """Go to the starting risk, however it is given."""
         self._go_to(self._window.patient.first_field)
 
-    def to_outcome(self) -> None:
-        """Go to the name of an outcome that begins."""
-        self._go_to(self._window.printed.name)
-
     def to_own_line(self) -> None:
         """Go to the reader's own line, drawn anew where there was none."""
         if self._window.session.outcome.line_kind == "none":

@@ -33,6 +33,7 @@ if TYPE_CHECKING:
     from fourcount.face.commands import Commands
     from fourcount.face.cursor_keeper import CursorKeeper
     from fourcount.face.outcome_commands import OutcomeCommands
+    from fourcount.face.reading import Reading
     from fourcount.face.view_commands import ViewCommands
 
 FIRST_SIZE = QSize(1280, 800)
@@ -54,6 +55,7 @@ class MainWindow(QMainWindow):
     commands: Commands
     cursor_keeper: CursorKeeper
     outcomes: OutcomeCommands
+    reading: Reading
     view: ViewCommands
     drawing: tuple[QActionGroup, QActionGroup]
     checking: Checking | None = None
@@ -158,7 +160,7 @@ class MainWindow(QMainWindow):
             self.header.bar.tabs.moved.connect(among.move_to)
         self.drawing[0].triggered.connect(see.take_icons)
         self.drawing[1].triggered.connect(see.take_arrangement)
-        among.begun.connect(go.to_outcome)
+        among.begun.connect(go.to_first_cell)
         among.told.connect(self._on_told)
         do.noticed.connect(self.header.tell)
         do.noticed.connect(self.banner.hide)
