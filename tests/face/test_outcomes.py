@@ -121,7 +121,7 @@ def test_a_new_outcome_is_of_the_same_study(three: Hands) -> None:
     assert three.texts == ("", "", "", "")
     assert three.window.printed.span.text() == "12 months"
     assert three.window.printed.grid.labels["first"].text() == "Night lights"
-    three.type("Pain")
+    three.write(three.window.printed.name, "Pain")
     assert tabs(three)[1] == "Pain"
     three.do("undo")
     three.do("undo")
