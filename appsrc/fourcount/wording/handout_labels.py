@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from fourcount.wording.command import NO_VALUE
 from fourcount.wording.file_labels import CLOSE, SAVE, file_labels
 
 __all__ = [
@@ -28,5 +29,4 @@ NO_OUT = "Say where the page goes with -o, such as -o page.pdf."
 ONE_FILE = "One file at a time, not {number}."
 UNKNOWN_OPTION = "There is no option {text}: try 'fourcount --help'."
 UNKNOWN_PAPER = "The paper must be a4 or letter, not {text}."
-NO_VALUE = "{option} needs a value after it."
 CANNOT_SHOW = "“{name}” cannot be on the page yet. {why}"
