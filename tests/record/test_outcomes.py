@@ -247,7 +247,7 @@ def test_an_empty_line_goes_where_such_lines_lie(welcome: bool, matters: str, ma
     outcome = Outcome(left_welcome=welcome)
     assert editing.with_line_kind(outcome, "matters").line_side == matters
     assert editing.with_line_kind(editing.with_line_kind(outcome, "matters"), "margin").line_side == margin
-    typed = Outcome(left_welcome=welcome, line_kind="matters", line_side=matters, line_text="5%")  # type: ignore[arg-type]
+    typed = Outcome(left_welcome=welcome, line_kind="matters", line_side=matters, line_text="5%")
     assert editing.with_line_kind(typed, "margin").line_side == matters
 
 
