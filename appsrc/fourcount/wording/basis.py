@@ -6,11 +6,11 @@ from fourcount.appraisal.findings import Gap, Interval, PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import USUAL_LEVEL, Choices
 from fourcount.wording import carried, effects, names, spans, starts
+from fourcount.wording.caution_texts import EFFECT_RANGE
 
 AT_OWN_RISK = "At {own}"
 OWN_RANGE = "The interval is the study’s own."
 BOTH_RANGE = "The interval holds the imprecision of both the starting risk and the {effect}."
-EFFECT_RANGE = "The interval leaves out that {baseline} is itself uncertain."
 OVERALL_RANGE = "The interval takes the overall risk and the share of people exposed as certain."
 CONSTANT_RANGE = "A difference kept constant has the same interval at every starting risk."
 USUAL = Choices(level=USUAL_LEVEL)

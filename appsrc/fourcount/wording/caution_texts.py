@@ -8,6 +8,7 @@ PLAIN_ESTIMATE = (
     "The estimate stays as it is; the interval is centred on the altered one and need not hold an estimate of 0 or "
     "infinity."
 )
+EFFECT_RANGE = "The interval leaves out that {baseline} is itself uncertain."
 UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
 TEXTS = {
     "read-as": ("How a count was read", "{text} is read as {value}."),
@@ -47,7 +48,7 @@ TEXTS = {
     ),
     "baseline-uncertain": (
         "The starting risk",
-        "The interval leaves out that {baseline} is itself uncertain.",
+        EFFECT_RANGE,
     ),
     "rests-on-baseline": (
         "The starting risk",
@@ -62,7 +63,8 @@ TEXTS = {
     ),
     "controls-over-time": (
         "How controls were chosen",
-        "If controls were sampled as cases arose, the study’s ratio is a rate ratio and must not be converted.",
+        "If controls were sampled as cases arose, the study’s ratio is a rate ratio and must not be converted: enter it as "
+        "a printed rate ratio then.",
     ),
     "observational": (
         "Confounding",
@@ -111,7 +113,7 @@ TEXTS = {
     ),
     "cannot-be-checked": (
         "No counts",
-        "This effect stands as the paper prints it: without counts nothing here can be worked out anew.",
+        "This effect stands as the paper prints it: without counts nothing here can tell whether it is right.",
     ),
     "interval-rebuilt": (
         "A rebuilt interval",
