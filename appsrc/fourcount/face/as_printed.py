@@ -159,6 +159,16 @@ class AsPrinted(FieldsView):
         """The field of what the paper says, made if it is not there yet."""
         return self.rare.paper_field(outcome, choices, self._width_of_names())
 
+    def read_in_order(self, parts: list[QWidget]) -> list[QWidget]:
+        """What the paper says comes right after the table, as Tab goes: the links are seldom needed."""
+        rare = self._rare
+        if rare is None or rare.check is None or rare.check.paper.parentWidget() is not rare.check:
+            return parts
+        moved = [part for part in (rare.check, rare.row_links) if part is not None]
+        rest = [part for part in parts if part not in moved]
+        after = rest.index(self.notes) + 1
+        return [*rest[:after], *moved, *rest[after:]]
+
     def _width_of_names(self) -> int:
         return max(words.sizeHint().width() for words in self._names.values())
 
@@ -188,8 +198,10 @@ class AsPrinted(FieldsView):
         self._form_rows.setColumnStretch(1, 1)
         names = ("design", "name_text", "left_words_text", "span_text", "form")
         self._names = {name: Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False) for name in names}
-        for row, words in enumerate(self._names.values()):
+        fields = (self.design, self.name, self.event_words, self.span, self.form)
+        for row, (words, field) in enumerate(zip(self._names.values(), fields, strict=True)):
             self._form_rows.addWidget(words, row, 0)
+            words.name_of(field)
         self._form_rows.addWidget(self.design, 0, 1, 1, 2)
         self._form_rows.addWidget(self.name, 1, 1)
         self._form_rows.addWidget(self.welcome, 1, 2)

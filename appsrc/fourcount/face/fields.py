@@ -21,7 +21,7 @@ from PySide6.QtGui import (
 from PySide6.QtWidgets import QComboBox, QLineEdit, QMenu, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
-from fourcount.face.text import tip
+from fourcount.face.text import name_choice, tip
 from fourcount.ink.style import Role
 from fourcount.ink.typeset import bounded
 
@@ -247,7 +247,7 @@ class ChoiceField(QComboBox):
         self._widest = 0
         for key, text in choices:
             self.addItem(text, key)
-        self.setAccessibleName(name)
+        name_choice(self, name)
         self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)  # not by the wheel
         self.setMinimumWidth(0)
         self.setSizeAdjustPolicy(QComboBox.SizeAdjustPolicy.AdjustToMinimumContentsLengthWithIcon)

@@ -11,6 +11,7 @@ from fourcount.face.commands import Commands
 from fourcount.face.cursor_keeper import CursorKeeper
 from fourcount.face.outcome_commands import OutcomeCommands
 from fourcount.face.outcomes_bar import OutcomesBar
+from fourcount.face.reading import Reading
 from fourcount.face.view_commands import ViewCommands
 from fourcount.picture.options import PictureOptions
 
@@ -38,3 +39,4 @@ def wake(window: MainWindow, settings: Settings, later: Later) -> None:
     window.commands.figures = window.patient.figures
     window.view = ViewCommands(window)
     window.header.take_bar(OutcomesBar(window.look, actions["outcome-add"], menus["outcomes"]))
+    window.reading = Reading(window)

@@ -77,6 +77,8 @@ class QuietRow(FieldsView):
             self.choice.chosen.connect(self._on_chosen)
         self.fields = tuple(TextField(look, text, QUIET_FIELDS[text], QUIET_HINTS.get(text, "")) for text in kind.texts)
         self._name = Words(look, "body", "muted", QUIET_NAMES[key], wraps=False)
+        if self.choice:
+            self._name.name_of(self.choice)
         self.close_link = QuietLink(look, key, "×", CLOSE_FIELDS.format(name=QUIET[key]))
         self.close_link.opened.connect(self.closed)
         policy = self.close_link.sizePolicy()
