@@ -122,11 +122,12 @@ def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) 
         window.printed.form, window.printed.layout_choice,
         grid.headings["left"], grid.headings["right"], grid.labels["first"], grid.labels["second"],
         *grid.cells.values(), rare.check.paper.measure, rare.check.paper.text, *window.printed.links,
-        *rare.optional.links.values(), *(example.row(key) for key in (*MEASURES, "test")),
+        *rare.optional.links.values(), window.says.sentence, *(example.row(key) for key in (*MEASURES, "test")),
         window.says.family, window.says.level, window.says.more, window.says.help, window.says.own_line_link,
         *window.says.copies, patient.start.kind, patient.baseline, patient.source, patient.effect,
-        patient.figures.show_patient, patient.figures.handout, patient.figures.draw,
-        patient.figures.copy, patient.figures.curve, *patient.quiet.links.values(), window.cautions,
+        patient.figures.picture, patient.figures.show_patient, patient.figures.handout, patient.figures.draw,
+        patient.figures.copy, patient.figures.curve, patient.figures.table, *patient.quiet.links.values(),
+        window.cautions,
     ]  # fmt: skip
     example.click(window.header.title)
     seen = []

@@ -109,6 +109,7 @@ class CurveTable(QTableWidget):
         self.setColumnCount(1 + len(head.cells))
         self.setHorizontalHeaderLabels([head.start, *head.cells])
         self.setRowCount(len(rows))
+        self.setVerticalHeaderLabels([row.start for row in rows])  # told with each cell of the row
         for place, row in enumerate(rows):
             for column, text in enumerate((row.start, *row.cells)):
                 self.setItem(place, column, QTableWidgetItem(text))

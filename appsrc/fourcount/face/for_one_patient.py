@@ -80,6 +80,7 @@ class ForOnePatient(FieldsView):
         self.names["starting_risk_text"].hide()
         self.figures = Figures(self._look, actions, menu)
         self.figures.hide()
+        self.figures.moved.connect(self._chain)
         self.figures.odds_wanted.connect(self._on_odds)
         rows = QVBoxLayout()
         self._column.insertLayout(2, rows)
@@ -167,8 +168,11 @@ class ForOnePatient(FieldsView):
         self._fields.setColumnStretch(1, 1)
         names = ("starting_risk_text", "starting_risk_source_text", "effect")
         self.names = {name: Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False) for name in names}
-        for row, words in enumerate(self.names.values()):
+        for row, (words, field) in enumerate(
+            zip(self.names.values(), (self.baseline, self.source, self.effect), strict=True)
+        ):
             self._fields.addWidget(words, row, 0)
+            words.name_of(field)
         self._start_area = QGridLayout()
         self._start_area.addWidget(self.baseline, 1, 0)
         self._fields.addLayout(self._start_area, 0, 1)

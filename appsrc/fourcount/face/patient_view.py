@@ -40,6 +40,7 @@ class PatientView(NamedTuple):
     summary: str = ""
     detail: str = ""
     rows: tuple[Row, ...] = ()
+    rows_head: Row | None = None
     rows_corner: str = ""
     rows_sentence: str = ""
     to_curve: bool = False
@@ -133,7 +134,7 @@ def _table(
         for row in rows
     )
     corner = TABLE_CORNER.format(people=numbers.whole(people_for_all(patient, people)))
-    return {"rows": tuple(rows), "rows_corner": corner, "rows_sentence": " ".join(said)}
+    return {"rows": tuple(rows), "rows_head": heads, "rows_corner": corner, "rows_sentence": " ".join(said)}
 
 
 def _own_risk(outcome: Outcome, findings: OutcomeFindings) -> bool:
