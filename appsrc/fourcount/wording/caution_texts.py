@@ -63,8 +63,7 @@ TEXTS = {
     ),
     "controls-over-time": (
         "How controls were chosen",
-        "If controls were sampled as cases arose, the study’s ratio is a rate ratio and must not be converted: enter it as "
-        "a printed rate ratio then.",
+        "If controls were sampled as cases arose, the study’s ratio is a rate ratio and must not be converted.",
     ),
     "observational": (
         "Confounding",

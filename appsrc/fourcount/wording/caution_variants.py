@@ -14,8 +14,8 @@ HALF_ADDED_TO_A_RATIO = (
     f"Because of a count of 0, the textbook interval of the {{measure}} is that with {WALTER}. {PLAIN_ESTIMATE}"
 )
 RATIO_KEPT_CONSTANT = (
-    "The {effect} is assumed to be the same at {baseline} as at the study’s own {study}; keeping the {effect} of not "
-    "having the event constant instead would give other figures."
+    "The {effect} is assumed to be the same at {baseline} as at the study’s own {study}; with the {effect} of not "
+    "having the event kept instead, {baseline} would become {other}, not {becomes}."
 )
 DIFFERENCE_KEPT_CONSTANT = (
     "The difference is assumed to be the same at {baseline} as at the study’s own {study}; differences vary with the "
@@ -29,6 +29,10 @@ RESTS_WITHOUT_TOTALS = (
     "Totals are those of cases and controls, as many as the study took, so that no risk follows from them: every risk, "
     "difference and number needed here rests on the starting risk of {baseline}, which is not from this study, and on "
     "the {effect} being the same there."
+)
+ENTER_A_RATE_RATIO = (
+    "If controls were sampled as cases arose, the study’s ratio is a rate ratio and must not be converted: enter it as "
+    "a printed rate ratio then."
 )
 SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or infinity are shown as they are."
 
@@ -105,10 +109,11 @@ def _crude_beside_adjusted(facts: Facts) -> str:
 VARIED: dict[str, Callable[[Facts], str]] = {
     "zero-cells": lambda facts: SEVERAL_ZEROS if facts.get("count", 1) != 1 else "",
     "half-added": lambda facts: HALF_ADDED_TO_A_RATIO if facts.get("measure") == "risk_ratio" else "",
-    "effect-kept-constant": lambda facts: RATIO_KEPT_CONSTANT if facts.get("effect") == "risk_ratio" else "",
+    "effect-kept-constant": lambda facts: RATIO_KEPT_CONSTANT if "other" in facts else "",
     "difference-kept-constant": lambda facts: DIFFERENCE_KEPT_CONSTANT if "study" in facts else "",
     "hazard-ratio": lambda facts: HAZARD_RATIO_CARRIED if "carried" in facts else "",
     "rests-on-baseline": lambda facts: RESTS_WITHOUT_TOTALS if "totals" in facts else "",
+    "controls-over-time": lambda facts: ENTER_A_RATE_RATIO if facts.get("design") == "case-control" else "",
     "observational": _observational,
     "crude-beside-adjusted": _crude_beside_adjusted,
 }

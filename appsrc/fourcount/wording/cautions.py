@@ -36,6 +36,7 @@ ADJUSTED_FOR = {"adjusted-effect": ", here {what}", "crude-beside-adjusted": " f
 PRINT_UNITS = {"percent": "%", "per-1000": " per 1,000"}
 FIRST_AND_SECOND = {"first": "the first group", "second": "the second"}
 UNNAMED = {"index": "Index group", "reference": "Reference group"}
+AS_A_RISK = ("other", "becomes")
 OPPOSITE = "point in opposite directions"
 A_TENTH = "differ by more than a tenth"
 
@@ -53,9 +54,7 @@ def caution_title(caution: Caution) -> str:
 def _said(caution: Caution) -> dict[str, str]:
     """Facts whose words depend on the caution, or on another fact, rather than on their own name."""
     facts = caution.facts
-    said: dict[str, str] = {}
-    if "start" in facts and isinstance(facts.get("baseline"), float):
-        said["baseline"] = numbers.percent(float(facts["baseline"]))
+    said = _said_of_carrying(facts)
     if "reason" in facts:
         said["reason"] = gap_text(Gap(str(facts["reason"])))
     if "counts" in facts:
@@ -75,6 +74,13 @@ def _said(caution: Caution) -> dict[str, str]:
         if name in facts and facts.get("measure") == "risk_difference":
             said[name] = _per_100(facts[name])
     return said
+
+
+def _said_of_carrying(facts: Mapping[str, Fact]) -> dict[str, str]:
+    """Risks that were worked out have the digits of computed ones; an adjusted effect is called so."""
+    names = (*AS_A_RISK, "baseline") if "start" in facts else AS_A_RISK
+    said = {name: numbers.percent(risk) for name in names if isinstance(risk := facts.get(name), float)}
+    return {**said, "effect": told("adjusted {effect}", facts)} if "adjusted" in facts else said
 
 
 def _said_of_a_print(caution: Caution) -> dict[str, str]:

@@ -119,6 +119,16 @@ GAP_TEXTS = {
     "other-span-pairs": "Over another time span this has no interval: both sides are the same people, and the limits "
     "of the two risks alone do not tell it.",
     "baseline-unreadable": "The starting risk cannot be read; 12% or 12 in 100 would do.",
+    "low-above-usual": "The low risk lies above the usual one; check which is which.",
+    "high-below-usual": "The high risk lies below the usual one; check which is which.",
+    "low-above-high": "The low risk lies above the high one; check which is which.",
+    "high-below-low": "The high risk lies below the low one; check which is which.",
+    "solved-beyond-one": "With this overall risk and share, the risk of one of the two groups would pass 100%.",
+    "solved-beyond-one-odds": "With this overall risk and share, the risk of one of the two groups would pass 100%; "
+    "the odds ratio can be carried instead.",
+    "solved-beyond-zero": "With this overall risk and share, the risk of one of the two groups would fall below 0%.",
+    "solved-beyond-zero-odds": "With this overall risk and share, the risk of one of the two groups would fall below "
+    "0%; the odds ratio can be carried instead.",
     "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
     "undetermined-at-baseline": "An infinite effect says nothing at a starting risk of 0%, nor an odds ratio of 0 "
     "at one of 100%.",

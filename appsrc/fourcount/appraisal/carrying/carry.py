@@ -111,7 +111,7 @@ def _by_the_effect(study: Study, one: Carriable, start: Start, spans: Spans) -> 
         return Gap("carried-gap")
     found = carried_to(one, start, spans.ratio)
     if isinstance(found.baseline, Gap):
-        return found.baseline
+        return found.baseline if start.share is None else _unsolved(found.baseline, one, study.carriable)
     own = study.own if start.origin == "reference" else None
     given, given_level = start.given(one.level) if own is None else (_whole(own.reference), own.level)
     return PatientFindings(
@@ -136,6 +136,16 @@ def _by_the_effect(study: Study, one: Carriable, start: Start, spans: Spans) -> 
         rank=start.rank,
         level=one.level,
     )
+
+
+def _unsolved(gap: Gap, one: Carriable, carriable: tuple[Carriable, ...]) -> Gap:
+    """Why no starting risk gives the overall risk; the odds ratio, which can do so, is named where there is one."""
+    key = {"beyond-one": "solved-beyond-one", "carried-beyond-zero": "solved-beyond-zero"}.get(gap.key)
+    if key is None:
+        return gap
+    instead = (other for other in carriable if other.effect == "odds_ratio" != one.effect)
+    odds = any(not isinstance(other.figure.estimate, Gap) for other in instead)
+    return Gap(f"{key}-odds" if odds else key)
 
 
 def _own_start(own: OwnRisks, level: float, spans: Spans) -> Figure:

@@ -24,30 +24,31 @@ CRUDE = (
 
 def effect_kept_constant(case: Case) -> Facts | None:
     """The study's relative effect is taken to hold at another starting risk, one that is not printed as the same."""
-    carried, study = case.carried, study_risk(case)
+    carried, study = _moved(case), study_risk(case)
     if carried is None or study is None or carried.effect == "risk_difference":
         return None
     effect = value(carried.carried)
     if effect is None or _printed_alike(carried.baseline, study):
         return None
-    return {"effect": carried.effect, "value": effect, **at_start(carried), "study": study, **_survey(case)}
+    other = _other_risk(carried.baseline, study, effect) if carried.effect == "risk_ratio" else {}
+    return {**_effect(carried), "value": effect, **at_start(carried), "study": study, **other, **_survey(case)}
 
 
 def kept_elsewhere(case: Case) -> Facts | None:
     """An effect is taken to hold at a starting risk whose distance from the study's is not known."""
-    carried = case.carried
+    carried = _moved(case)
     effect = None if carried is None else value(carried.carried)
     if carried is None or effect is None or carried.effect == "risk_difference" or study_risk(case) is not None:
         return None
     # Of cases and controls, that all rests on the starting risk says as much.
     if case.outcome.design in OUTSIDE:
         return None
-    return {"effect": carried.effect, "value": effect, **at_start(carried), **_survey(case)}
+    return {**_effect(carried), "value": effect, **at_start(carried), **_survey(case)}
 
 
 def difference_kept_constant(case: Case) -> Facts | None:
     """A difference varies with the starting risk more than a ratio does."""
-    carried, study = case.carried, study_risk(case)
+    carried, study = _moved(case), study_risk(case)
     if carried is None or carried.effect != "risk_difference":
         return None
     if study is None:
@@ -85,7 +86,7 @@ def rests_on_baseline(case: Case) -> Facts | None:
     carried = case.carried
     if carried is None or case.outcome.design not in OUTSIDE:
         return None
-    facts: Facts = {**at_start(carried), "effect": carried.effect}
+    facts: Facts = {**at_start(carried), **_effect(carried)}
     return {**facts, "totals": "sampled"} if isinstance(case.given, Counts) else facts
 
 
@@ -94,7 +95,7 @@ def solved_from_overall(case: Case) -> Facts | None:
     carried = case.carried
     if carried is None or carried.start_from != "overall":
         return None
-    return {**at_start(carried), "effect": carried.effect, **_survey(case)}
+    return {**at_start(carried), **_effect(carried), **_survey(case)}
 
 
 def from_a_rate(case: Case) -> Facts | None:
@@ -108,8 +109,8 @@ def from_a_rate(case: Case) -> Facts | None:
 
 def controls_over_time(case: Case) -> Facts | None:
     """The odds ratio of a case-control study is carried: it must not be if it is a rate ratio."""
-    carried = case.carried
-    return {} if carried is not None and case.outcome.design in OUTSIDE and carried.effect == "odds_ratio" else None
+    carried, design = case.carried, case.outcome.design
+    return {"design": design} if carried is not None and design in OUTSIDE and carried.effect == "odds_ratio" else None
 
 
 def within_pairs(case: Case) -> Facts | None:
@@ -166,6 +167,38 @@ def carried_level(case: Case) -> Facts | None:
 def study_risk(case: Case) -> float | None:
     """The risk of the study's own reference group or side, where it has one."""
     return value(case.figures.get("risk_reference") or case.figures.get("pair_risk_reference"))
+
+
+def _moved(case: Case) -> PatientFindings | None:
+    """The patient, or of three the first, whose risk the effect moves to another one that can be given."""
+    patient = case.carried
+    if patient is None:
+        return None
+    for one in (patient, patient.low, patient.high):
+        if isinstance(one, PatientFindings) and not isinstance(one.with_.estimate, Gap):
+            stays = (0.0,) if one.effect == "risk_ratio" else () if one.effect == "risk_difference" else (0.0, 1.0)
+            if one.baseline not in stays:
+                return one
+    return None
+
+
+def _other_risk(baseline: float, study: float, ratio: float) -> Facts:
+    """What keeping the risk ratio of not having the event would make of the starting risk, where people see that.
+
+    Both ratios say the same at the study's own risk, and part elsewhere.
+    """
+    if study >= 1.0 or ratio * study > 1.0:
+        return {}
+    becomes, other = ratio * baseline, 1.0 - (1.0 - baseline) * (1.0 - ratio * study) / (1.0 - study)
+    people = 100 if min(becomes, other) >= 0.01 else 1000
+    if round(becomes * people) == round(other * people):
+        return {}
+    return {"other": other if other >= 0.0 else "less than 0%", "becomes": becomes}
+
+
+def _effect(carried: PatientFindings) -> Facts:
+    """The kind of effect, and that it is an adjusted one where it is."""
+    return {"effect": carried.effect, **({"adjusted": "adjusted"} if carried.adjusted else {})}
 
 
 def _adjusted_beside_counts(case: Case) -> PatientFindings | None:
