@@ -85,10 +85,11 @@ def test_a_margin_on_the_worse_side() -> None:
     ],
 )
 def test_better_and_worse_are_those_of_the_margin(worse_side: bool, lies: str, side: str) -> None:
-    """Which side is better does not hang on which side of no effect the margin lies."""
+    """Which side is better does not hang on which side of no effect the margin lies; that is said by itself."""
     line = msgspec.structs.replace(a_margin(), worse_side=worse_side, lies=lies)
     said = line_sentence(Outcome(), line)
     assert f"{side} of your margin" in said
+    assert ("2 more per 100 (itself better than no effect)" in said) != worse_side
     assert "against an effect at the margin or worse" in said
 
 
