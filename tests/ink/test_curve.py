@@ -18,7 +18,8 @@ from fourcount.appraisal.curve import curve, highest_start
 from fourcount.appraisal.findings import Gap
 from fourcount.ink import curve as pen_of_curve
 from fourcount.ink.curve import Format, draw_curve
-from fourcount.ink.curve_layout import CurveLayout, Sheet, dash_of
+from fourcount.ink.curve_layout import CurveLayout, dash_of
+from fourcount.ink.curve_sheet import Sheet
 from fourcount.ink.palette import DARK, LIGHT, PAPER, contrast
 from fourcount.picture.curve_axes import reach_for
 from fourcount.record.outcome import Outcome, Patient

@@ -11,7 +11,7 @@ from PySide6.QtWidgets import QAbstractItemView, QHeaderView, QSizePolicy, QTabl
 from fourcount.face.look import Look
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.wording import curve_labels as labels
-from fourcount.wording.curve import CurveRow
+from fourcount.wording.curve_table import CurveRow
 
 LEAST = QSize(360, 240)
 """Pixels at 100% text below which the drawing does not go."""

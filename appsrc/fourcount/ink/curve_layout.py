@@ -2,20 +2,35 @@
 
 from __future__ import annotations
 
-from collections.abc import Sequence
-from typing import Literal, NamedTuple, Protocol
+from typing import NamedTuple
 
 from fourcount.appraisal.findings import Gap
 from fourcount.appraisal.findings.curve import Curve, CurveLine, CurveMark
+from fourcount.ink.curve_sheet import (
+    BAND,
+    BODY,
+    FOOT,
+    GAP,
+    LEAST,
+    LINE,
+    MARGIN,
+    NAMES_SHARE,
+    PAGE_MARGIN,
+    SMALL,
+    STRONG,
+    TALL,
+    Dash,
+    Marks,
+    Pen,
+    Shape,
+    Sheet,
+    wrapped,
+)
 from fourcount.ink.palette import Palette
 from fourcount.picture import curve_axes
+from fourcount.picture.places import Box, Drawn, Value, place_beside, shared
 from fourcount.wording import numbers
 from fourcount.wording.curve import CurveWords, View, shown_lines
-
-Box = tuple[float, float, float, float]
-Dash = tuple[float, ...]
-Shape = Literal["square", "round"]
-Value = tuple[float, float]
 
 DASHES: dict[str, Dash] = {
     "risk_ratio": (),
@@ -28,35 +43,20 @@ ADJUSTED: Dash = (12, 2, 1.5, 2, 1.5, 2)
 NO_EFFECT: Dash = (1, 2.5)
 """Lines are told by their dashes and by their names: colour says nothing that these do not."""
 
-BODY, SMALL, STRONG, FOOT = 13.0, 12.0, 15.0, 10.5
-LINE = 1.3  # the height of a line of text, of its size
-GAP = 8.0
-MARGIN, PAGE_MARGIN = 6.0, 28.0
-NAMES_SHARE = 0.34  # of the width, at most, for the names at the ends of the lines
-BAND = 0.15  # the strength of its colour
 
+class Block(NamedTuple):
+    """A text in lines, as it is drawn, with the room before and after it."""
 
-class Marks(NamedTuple):
-    """An axis: where it begins and ends, and its marks with their words."""
+    lines: list[str]
+    size: float
+    colour: str
+    strong: bool = False
+    before: float = 0.0
+    after: float = 0.0
 
-    low: float
-    high: float
-    values: tuple[float, ...]
-    words: tuple[str, ...]
-
-
-class Sheet(NamedTuple):
-    """What is drawn on: its size in pixels, the size of text, device pixels a pixel, and the font.
-
-    ``foot`` is what has to travel with a drawing that leaves the window; it then has its heading and sentences too.
-    """
-
-    width: float
-    height: float
-    zoom: float = 1.0
-    ratio: float = 1.0
-    family: str = ""
-    foot: tuple[str, ...] = ()
+    @property
+    def height(self) -> float:
+        return self.before + LINE * self.size * len(self.lines) + self.after
 
 
 class Name(NamedTuple):
@@ -66,24 +66,6 @@ class Name(NamedTuple):
     strong: bool
     colour: str
     end: Value
-
-
-class Pen(Protocol):
-    """What is drawn with."""
-
-    def width(self, text: str, size: float, strong: bool = False) -> float: ...
-    def text(
-        self, x: float, y: float, text: str, size: float, colour: str, strong: bool = False, right: bool = False,
-        ground: str = "",
-    ) -> None: ...  # fmt: skip
-    def stroke(self, points: Sequence[Value], colour: str, width: float) -> None: ...
-    def set_axes(
-        self, box: Box, across: Marks, up: Marks, logarithmic: bool, size: float, colours: Palette
-    ) -> None: ...
-    def where(self, x: float, y: float) -> Value: ...
-    def line(self, points: Sequence[Value], colour: str, width: float, dash: Dash = ()) -> None: ...
-    def area(self, rows: Sequence[tuple[float, float, float]], colour: str, strength: float) -> None: ...
-    def point(self, x: float, y: float, shape: Shape, size: float, fill: str, edge: str) -> None: ...
 
 
 class CurveLayout:
@@ -109,72 +91,92 @@ class CurveLayout:
         """A length that grows with the text."""
         return pixels * self.sheet.zoom
 
+    def grow(self, pen: Pen) -> Sheet:
+        """The sheet as large as it has to be: a page has its texts beyond the room for its curve."""
+        sheet, least = self.sheet, (self.px(LEAST[0]), self.px(LEAST[1]))
+        self.sheet = sheet._replace(width=max(sheet.width, least[0]), height=max(sheet.height, least[1]))
+        if sheet.foot:
+            texts = sum(block.height for block in (*self._head(pen), *self._end(pen)))
+            self.sheet = self.sheet._replace(height=self.sheet.height + texts)
+        return self.sheet
+
     def draw(self, pen: Pen) -> None:
         """Draw all of it."""
-        inside, top, floor = self.sheet.width - 2 * self.margin, self.sheet.height - self.margin, self.margin
+        top, floor = self.sheet.height - self.margin, self.margin
         if self.sheet.foot:
-            top, floor = self._page(pen, inside, top)
+            for block in self._head(pen):
+                top = self._put(pen, self.margin, top, block)
+            end = self._end(pen)
+            floor += sum(block.height for block in end)
+            under = floor
+            for block in end:
+                under = self._put(pen, self.margin, under, block)
         if not self.lines:
-            note = self._wrapped(pen, " ".join(self.words.notes), BODY, inside)
-            self._put(pen, self.margin, top, note, BODY, self.palette.muted)
+            self._put(pen, self.margin, top, self._block(pen, " ".join(self.words.notes), BODY, self.palette.muted))
             return
         across, up = self._across(), self._up()
         left = self.margin + max(pen.width(word, self.px(SMALL)) for word in up.words) + self.px(GAP)
-        names = self._names(pen, inside)
+        names = self._names(pen, top - floor)
         widest = max(pen.width(line, self.px(SMALL), name.strong) for name in names for line in name.lines)
         right = self.sheet.width - self.margin - widest - self.px(3 * GAP)
-        above = self._wrapped(pen, self.words.up, SMALL, self.sheet.width - self.margin - left)
-        top = self._put(pen, left, top, above, SMALL, self.palette.muted) - self.px(1.5 * GAP)
-        below = self._wrapped(pen, self.words.across, SMALL, self.sheet.width - self.margin - left)
-        tall = self.px(SMALL) * LINE
-        self._put(pen, left, floor + tall * len(below), below, SMALL, self.palette.muted)
-        box = (left, floor + tall * (len(below) + 1) + self.px(1.5 * GAP), right, top)
+        room, most = right - left + self.px(GAP), 2 if self.sheet.height < self.px(TALL) else 3
+        above = self._block(pen, self.words.up, SMALL, self.palette.muted, room=room, most=most)
+        below = self._block(pen, self.words.across, SMALL, self.palette.muted, room=room, most=most)
+        self._put(pen, left, top, above)
+        self._put(pen, left, floor + below.height, below)
+        marks = self.px(SMALL) * LINE + self.px(1.5 * GAP)
+        box = (left, floor + below.height + marks, right, top - above.height - self.px(1.5 * GAP))
         pen.set_axes(box, across, up, self.view.ratios, self.px(SMALL), self.palette)
         self._draw_lines(pen)
-        self._set_names(pen, names, box)
+        self._set_names(pen, names, box, (floor, top))
         self._draw_points(pen, box)
 
     # Text
 
-    def _wrapped(self, pen: Pen, text: str, size: float, room: float, strong: bool = False) -> list[str]:
-        """A text in lines that fit; a word that is too long for one is cut, with a sign of it."""
-        lines: list[str] = []
-        for whole in text.split():
-            word = whole
-            longer = f"{lines[-1]} {word}" if lines else word
-            if lines and pen.width(longer, self.px(size), strong) <= room:
-                lines[-1] = longer
-                continue
-            while len(word) > 2 and pen.width(word, self.px(size), strong) > room:
-                word = f"{word[: min(len(word) - 2, int(len(word) * 0.9))]}…"
-            lines.append(word)
-        return lines
+    @property
+    def inside(self) -> float:
+        """The width between the margins."""
+        return self.sheet.width - 2 * self.margin
 
-    def _put(
-        self, pen: Pen, x: float, top: float, lines: Sequence[str], size: float, colour: str, strong: bool = False
-    ) -> float:
+    def _block(
+        self,
+        pen: Pen,
+        text: str,
+        size: float,
+        colour: str,
+        *,
+        strong: bool = False,
+        room: float | None = None,
+        most: int | None = None,
+    ) -> Block:
+        """A text in lines, in the room given or between the margins."""
+        tall = self.px(size)
+        lines = wrapped(pen, text, tall, self.inside if room is None else room, strong=strong, most=most)
+        return Block(lines, tall, colour, strong)
+
+    def _put(self, pen: Pen, x: float, top: float, block: Block) -> float:
         """Lines of text downwards; gives where they end."""
-        tall = self.px(size) * LINE
-        for place, line in enumerate(lines):
-            pen.text(x, top - tall * (place + 0.5), line, self.px(size), colour, strong)
-        return top - tall * len(lines)
+        top -= block.before
+        for line in block.lines:
+            pen.text(x, top - block.size * LINE / 2, line, block.size, block.colour, block.strong)
+            top -= block.size * LINE
+        return top - block.after
 
-    def _page(self, pen: Pen, inside: float, top: float) -> Value:
-        """Heading, sentences and foot of a drawing that leaves the window; gives what is left between them."""
+    def _head(self, pen: Pen) -> tuple[Block, Block]:
+        """What stands above the curve of a page: of which paper it is, and its title."""
         words, palette = self.words, self.palette
-        top = self._put(pen, self.margin, top, self._wrapped(pen, words.heading, SMALL, inside), SMALL, palette.muted)
-        title = self._wrapped(pen, words.title, STRONG, inside, True)
-        top = self._put(pen, self.margin, top, title, STRONG, palette.ink, True) - self.px(1.5 * GAP)
-        said = self._wrapped(pen, words.sentence, SMALL, inside)
-        foot = [
-            line
-            for text in (" ".join(words.notes), *self.sheet.foot)
-            for line in self._wrapped(pen, text, FOOT, inside)
-        ]
-        tall = LINE * (self.px(SMALL) * len(said) + self.px(FOOT) * len(foot)) + self.px(GAP)
-        end = self._put(pen, self.margin, self.margin + tall, said, SMALL, palette.ink) - self.px(GAP)
-        self._put(pen, self.margin, end, foot, FOOT, palette.muted)
-        return top, self.margin + tall + self.px(1.5 * GAP)
+        title = self._block(pen, words.title, STRONG, palette.ink, strong=True, most=3)
+        return (
+            self._block(pen, words.heading, SMALL, palette.muted, most=2),
+            title._replace(after=self.px(1.5 * GAP)),
+        )
+
+    def _end(self, pen: Pen) -> tuple[Block, ...]:
+        """What stands under the curve of a page: its sentence, what it rests on, what has to be kept in mind."""
+        sentence = self._block(pen, self.words.sentence, SMALL, self.palette.ink)
+        notes = (" ".join(self.words.notes), *self.sheet.foot)
+        apart = sentence._replace(before=self.px(1.5 * GAP), after=self.px(GAP))
+        return (apart, *(self._block(pen, text, FOOT, self.palette.muted) for text in notes))
 
     # Axes
 
@@ -248,8 +250,8 @@ class CurveLayout:
 
     # Names
 
-    def _names(self, pen: Pen, inside: float) -> list[Name]:
-        palette, reach, room = self.palette, self.curve.reach, inside * NAMES_SHARE
+    def _names(self, pen: Pen, height: float) -> list[Name]:
+        palette, reach, room = self.palette, self.curve.reach, self.inside * NAMES_SHARE
         ends: list[tuple[str, bool, str, Value]] = [
             (self.words.reference, False, palette.muted, (reach, 1.0 if self.view.ratios else reach))
         ]
@@ -260,25 +262,28 @@ class CurveLayout:
             drawn, chosen = self._drawn(line), self._chosen(line)
             if drawn:
                 ends.append((name, chosen, palette.accent if chosen else palette.ink, drawn[-1]))
+        size = self.px(SMALL)
+        wanted = [len(wrapped(pen, text, size, room, strong=strong)) for text, strong, _, _ in ends]
+        most = shared(wanted, int((height - len(ends) * self.px(GAP / 2)) / (size * LINE)))
         return [
-            Name(self._wrapped(pen, text, SMALL, room, strong), strong, colour, end)
-            for text, strong, colour, end in ends
+            Name(wrapped(pen, text, size, room, strong=strong, most=lines), strong, colour, end)
+            for (text, strong, colour, end), lines in zip(ends, most, strict=True)
         ]
 
-    def _set_names(self, pen: Pen, names: list[Name], box: Box) -> None:
+    def _set_names(self, pen: Pen, names: list[Name], box: Box, between: Value) -> None:
         """Names stand at the right, apart from one another, each led to by a thin line from the end of its own."""
         tall = self.px(SMALL) * LINE
         places = [pen.where(*name.end) for name in names]
         heights = [tall * len(name.lines) + self.px(GAP / 2) for name in names]
-        low, high = box[1] - 3 * tall, self.sheet.height - self.margin
         # Of lines that end at the top, the one that ends first has the highest name: its leader then crosses no line.
         wanted = [y + (box[2] - x) for x, y in places]
-        middles = curve_axes.apart(wanted, heights, low, high)
+        middles = curve_axes.apart(wanted, heights, *between)
         left = box[2] + self.px(2.5 * GAP)
         for name, (x, y), middle in zip(names, places, middles, strict=True):
             bend = (box[2] + self.px(GAP), middle)
             pen.stroke([(x + self.px(2), y), bend, (left - self.px(3), middle)], self.palette.outline, self.px(0.8))
-            self._put(pen, left, middle + tall * len(name.lines) / 2, name.lines, SMALL, name.colour, name.strong)
+            block = Block(name.lines, self.px(SMALL), name.colour, name.strong)
+            self._put(pen, left, middle + block.height / 2, block)
 
     # Points
 
@@ -296,7 +301,8 @@ class CurveLayout:
         return next(point.value for point in chosen.points if point.start == mark.without)
 
     def _draw_points(self, pen: Pen, box: Box) -> None:
-        palette, shown = self.palette, []
+        palette = self.palette
+        shown: list[tuple[Value, str, bool]] = []
         for mark, name in zip(self.curve.marks, self.words.marks, strict=True):
             y, (low, high) = self._value(mark), self._bar(mark)
             if isinstance(y, Gap) or not self._fits(y):
@@ -307,34 +313,37 @@ class CurveLayout:
             shape: Shape = "square" if mark.of_study else "round"
             pen.point(mark.without, y, shape, self.px(8), palette.page if own else palette.ink, palette.ink)
             above = y > (1.0 if self.view.ratios else mark.without)
-            shown.append((pen.where(mark.without, y), name, 1 if above else -1))
-        reach = self.px(GAP)
-        taken: list[Box] = [(x - reach, y - reach, x + reach, y + reach) for (x, y), _, _ in shown]
-        for at, name, side in shown:
-            place = self._beside(pen, at, name, side, box, taken)
+            shown.append((pen.where(mark.without, y), name, above))
+        self._name_points(pen, shown, box)
+
+    def _name_points(self, pen: Pen, shown: list[tuple[Value, str, bool]], box: Box) -> None:
+        """A name stands beside its point, clear of the axes and, where there is room, of all lines."""
+        reach, size = self.px(GAP), self.px(SMALL)
+        taken = [(x - reach, y - reach, x + reach, y + reach) for (x, y), _, _ in shown]
+        room = (box[0] + self.px(2), box[1] + self.px(2), box[2] + reach, box[3])
+        paths = [[pen.where(*value) for value in line] for line in self._all_drawn()]
+        for at, name, above in shown:
+            wide = pen.width(name, size)
+            place = place_beside(at, (wide, size * LINE), reach, upwards=above, drawn=Drawn(room, taken, paths))
             taken.append(place)
             middle = (place[1] + place[3]) / 2
-            if abs(middle - at[1]) > 1.5 * self.px(SMALL) * LINE:
-                near = min(max(at[0], place[0]), place[2])
-                pen.stroke([at, (near, place[1] if middle > at[1] else place[3])], palette.ink, self.px(0.8))
-            pen.text(place[0], middle, name, self.px(SMALL), palette.ink, ground=palette.page)
+            near = min(max(at[0], place[0]), place[2])
+            if abs(middle - at[1]) > 1.5 * size * LINE or abs(near - at[0]) > 2 * reach:
+                end = middle if abs(middle - at[1]) < size else place[1] if middle > at[1] else place[3]
+                pen.stroke([at, (near, end)], self.palette.ink, self.px(0.8))
+            pen.text(place[0], middle, name, size, self.palette.ink, ground=self.palette.page)
 
-    def _beside(self, pen: Pen, at: Value, name: str, side: int, box: Box, taken: list[Box]) -> Box:
-        """Room for the name of a point: beside it, on the side where no line goes on if that is free."""
-        tall, wide, gap = self.px(SMALL) * LINE, pen.width(name, self.px(SMALL)), self.px(GAP)
-        tried = []
-        for steps in (1.0, 2.2, 3.4, 4.6):
-            for way in (side, -side):
-                for left in (at[0] + gap, at[0] - gap - wide):
-                    middle = at[1] + way * steps * tall
-                    tried.append((left, middle - tall / 2, left + wide, middle + tall / 2))
-        inside = [one for one in tried if one[0] >= box[0] and one[1] > box[1] + 2 and one[2] <= box[2] + gap]
-        free = [one for one in inside if not any(_meet(one, other) for other in taken)]
-        return (free or inside or tried)[0]
-
-
-def _meet(one: Box, other: Box) -> bool:
-    return one[0] < other[2] and other[0] < one[2] and one[1] < other[3] and other[1] < one[3]
+    def _all_drawn(self) -> list[list[Value]]:
+        """Every line there is: of effects, of no difference, and the bars of points."""
+        found = [self._drawn(line) for line in self.lines]
+        found += [[(0.0, y), (self.curve.reach, y)] for y in (1.0, self._odds()) if self.view.ratios and y is not None]
+        if not self.view.ratios:
+            found.append([(0.0, 0.0), (self.curve.reach, self.curve.reach)])
+        for mark in self.curve.marks:
+            low, high = self._bar(mark)
+            if not isinstance(low, Gap) and not isinstance(high, Gap):
+                found.append([(mark.without, low), (mark.without, high)])
+        return found
 
 
 def dash_of(line: CurveLine) -> Dash:
