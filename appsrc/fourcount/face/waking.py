@@ -4,6 +4,8 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
+from PySide6.QtWidgets import QWidget
+
 from fourcount.face import actions as commands_table
 from fourcount.face.checking import Checking
 from fourcount.face.collecting import Collecting
@@ -38,5 +40,7 @@ def wake(window: MainWindow, settings: Settings, later: Later) -> None:
     window.patient.wake(actions, menus["picture"], options)
     window.commands.figures = window.patient.figures
     window.view = ViewCommands(window)
-    window.header.take_bar(OutcomesBar(window.look, actions["outcome-add"], menus["outcomes"]))
+    bar = OutcomesBar(window.look, actions["outcome-add"], menus["outcomes"])
+    window.header.take_bar(bar)
+    QWidget.setTabOrder(bar.plus, window.banner.dismiss)
     window.reading = Reading(window)

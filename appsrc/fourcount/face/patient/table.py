@@ -47,6 +47,7 @@ class PatientTable(QTableWidget):
         super().__init__()
         self._look = look
         self._rows: tuple[Row, ...] = ()
+        self._head: Row | None = None
         self._corner = ""
         self._laid: dict[int, list[Line]] = {}
         policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
@@ -72,9 +73,9 @@ class PatientTable(QTableWidget):
         """Show these rows, or nothing; ``corner`` says of how many people. Equal ones change nothing."""
         if sentence != self.accessibleDescription():
             self.setAccessibleDescription(sentence)
-        if (tuple(rows), corner) == (self._rows, self._corner):
+        if (tuple(rows), head, corner) == (self._rows, self._head, self._corner):
             return
-        self._rows, self._corner = tuple(rows), corner
+        self._rows, self._head, self._corner = tuple(rows), head, corner
         self._laid.clear()
         if head is not None:
             self._fill(head)
