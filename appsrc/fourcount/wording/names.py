@@ -195,6 +195,16 @@ def _other_column(outcome: Outcome) -> Column:
     return "right" if outcome.counted == "left" else "left"
 
 
+def span(outcome: Outcome) -> str:
+    """The study's time span without a preposition where it is one, else as typed: "12 months", "median 2 years"."""
+    typed = bare(outcome.span_text)
+    if not typed:
+        return ""
+    from fourcount.wording.durations import span_said  # an empty window needs none of it
+
+    return span_said(typed)
+
+
 def within_span(outcome: Outcome) -> str:
     """The time span after a verb: "within 12 months", or "" where none was typed; a survey has no "within"."""
     return within(_common_span(outcome), outcome)
@@ -220,7 +230,7 @@ def over(span: str) -> str:
 def _common_span(outcome: Outcome) -> str:
     """The time for which everybody was followed; counts of people followed for different times have none."""
     varied = outcome.follow_up_varied and not isinstance(outcome.table, NOT_COUNTED)
-    return "" if varied else bare(outcome.span_text)
+    return "" if varied else span(outcome)
 
 
 def _begins_with_preposition(span: str) -> bool:

@@ -101,7 +101,7 @@ def missing(outcome: Outcome) -> tuple[str, ...]:
         "the event": event not in ("", BECAME_CASES),
         "the reference group": spoken.reference_label_text.strip() not in ("", *UNNAMED),
         "the index group": spoken.index_label_text.strip() not in ("", *UNNAMED),
-        "the time span": spoken.span_text.strip() != "",
+        "the time span": names.span(spoken) != "",
     }
     return tuple(name for name, is_named in named.items() if not is_named)
 

@@ -134,7 +134,7 @@ def span(outcome: Outcome, patient: PatientFindings) -> str:
     """The time with its preposition, "in 12 months": the other time span where one is asked for."""
     if patient.other_span is not None:
         return in_time(spans.duration(patient.other_span))
-    return "" if _times_differ(outcome) else in_time(names.bare(outcome.span_text))
+    return "" if _times_differ(outcome) else in_time(names.span(outcome))
 
 
 def in_time(text: str) -> str:
@@ -276,7 +276,7 @@ def _study(outcome: Outcome, patient: PatientFindings) -> str:
     """Where people were followed for different times, and where the risks are over another time than the study's."""
     said = []
     if _times_differ(outcome):
-        said.append(plain_texts.VARIED.format(span=f" ({names.bare(outcome.span_text)})"))
+        said.append(plain_texts.VARIED.format(span=f" ({names.span(outcome)})"))
     if patient.other_span is not None and patient.study_span is not None:
         ran, other = spans.duration(patient.study_span), spans.duration(patient.other_span)
         said.append(plain_texts.OTHER_SPAN.format(span=ran, other=other))
