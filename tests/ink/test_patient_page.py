@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import pytest
+from msgspec.structs import replace
 from PySide6.QtGui import QColor, QImage, QPainter
 
 from fourcount.appraisal.appraise import appraise
@@ -73,6 +74,28 @@ def test_a_larger_room_makes_a_larger_page() -> None:
     """A screen of 1920 by 1020 sets larger text than one of 1024 by 640."""
     page = PatientPage(ready(TRIAL))
     assert page.style(1920, 1020).scale > 1.3 * page.style(1024, 640).scale
+
+
+def test_what_makes_a_difference_doubtful_cannot_be_missed() -> None:
+    """That there may be none stands in the size and ink of the difference; what else may explain it comes next."""
+    page = PatientPage(ready(replace(SMALL, design="cohort")))
+    style = page.style(1280, 740)
+    runs = {run.text: run for paragraph, _ in page._below(style, 1200) for run in paragraph}
+    difference, *others = runs.values()
+    doubts = [run for run in others if "leaves open" in run.text]
+    assert [(run.font, run.colour) for run in doubts] == [(difference.font, difference.colour)]
+    explained = next(run for run in others if run.text.startswith("Other things"))
+    assert explained.colour == PAPER.ink
+    assert explained.font.pixelSize() > style.font("body").pixelSize()
+
+
+@pytest.mark.parametrize("room", ROOMS[:2], ids=str)
+def test_counts_stay_on_their_line(room: tuple[int, int]) -> None:
+    """On a usual screen text is made somewhat smaller rather than that a count or its percentage wraps."""
+    for outcome in (TRIAL, AT_TWELVE, WELCOME, HAZARD, CASE_CONTROL):
+        page = PatientPage(ready(outcome))
+        style = page.style(*room)
+        assert not page._picture.counts_wrap(style, page._wide(style, room[0]))
 
 
 def test_paper_colours_are_read_easily() -> None:

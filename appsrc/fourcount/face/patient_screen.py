@@ -15,7 +15,8 @@ from fourcount.face.links import Link
 from fourcount.face.on_white import OnWhite
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.face.text import Words
-from fourcount.ink.patient_page import PatientPage
+from fourcount.ink.paper_style import PaperStyle
+from fourcount.ink.patient_page import MARGIN, PatientPage
 from fourcount.ink.plain_picture import Shown, shown
 from fourcount.wording import plain_texts
 from fourcount.wording.plain_refusal import why_not as why_no_screen
@@ -56,6 +57,7 @@ class Canvas(QWidget):
         super().__init__()
         self._look = look
         self._page: PatientPage | None = None
+        self._style: PaperStyle | None = None
         self._room = QSize()
         self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
         look.changed.connect(self._fit)
@@ -67,6 +69,11 @@ class Canvas(QWidget):
         self.setAccessibleDescription(it.words.sentence)
         self._fit()
 
+    @property
+    def margin(self) -> int:
+        """How far the page's text stands from its edges."""
+        return self._style.px(MARGIN) if self._style else 0
+
     def take_room(self, room: QSize) -> None:
         """Fill the room that there is; what needs more can be scrolled to."""
         if room != self._room:
@@ -75,18 +82,17 @@ class Canvas(QWidget):
 
     def _fit(self) -> None:
         if self._page is not None and not self._room.isEmpty():
-            style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
-            tall = max(float(self._room.height()), self._page.least_height(style, self._room.width()))
+            self._style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
+            tall = max(float(self._room.height()), self._page.least_height(self._style, self._room.width()))
             self.setFixedSize(self._room.width(), round(tall))
         self.update()
 
     def paintEvent(self, event: QPaintEvent) -> None:
-        if self._page is None or self._room.isEmpty():
+        if self._page is None or self._style is None:
             return
         painter = QPainter(self)
         painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-        style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
-        self._page.draw(painter, style, self.width(), self.height())
+        self._page.draw(painter, self._style, self.width(), self.height())
         if self.hasFocus() and self.height() > self._room.height():
             painter.setPen(QPen(self._look.colour("accent"), 2))
             painter.drawRect(self.rect().adjusted(1, 1, -1, -1))
@@ -248,13 +254,17 @@ class PatientScreen(QWidget):
         ]
         wide = sum(widget.sizeHint().width() for widget in shown) + self._look.px(LINK_GAP) * len(shown)
         words = self.foot.fontMetrics().horizontalAdvance(self.foot.text())
-        beside = wide + words + self._look.px(2 * FOOT_MARGIN + LINK_GAP) <= self.width()
+        margins = 2 * max(self.canvas.margin, self._look.px(FOOT_MARGIN))
+        beside = wide + words + margins + self._look.px(LINK_GAP) <= self.width()
         ways = QBoxLayout.Direction
         self._foot_row.setDirection(ways.LeftToRight if beside else ways.TopToBottom)
         self._links.setMinimumWidth(wide if beside else 0)
         self._column.activate()
         room = self._scroll.size()
-        self.canvas.take_room(QSize(room.width() - self._scroll.verticalScrollBar().sizeHint().width(), room.height()))
+        bar = self._scroll.verticalScrollBar().sizeHint().width()
+        self.canvas.take_room(QSize(room.width() - bar, room.height()))
+        edge, above = self.canvas.margin or self._look.px(FOOT_MARGIN), self._look.px(10)
+        self._foot_row.setContentsMargins(edge, above, edge + bar, above)  # as the page above it
 
     # Slots
 
@@ -279,7 +289,6 @@ class PatientScreen(QWidget):
 
     def _on_look_changed(self) -> None:
         px = self._look.px
-        self._foot_row.setContentsMargins(px(FOOT_MARGIN), px(10), px(FOOT_MARGIN), px(10))
         self._foot_row.setSpacing(px(10))
         self.place.setFixedHeight(px(26))  # as high as the links beside it
         self._fit()
