@@ -97,9 +97,11 @@ def at_start(carried: PatientFindings) -> Facts:
 def straddles(interval: Interval | Range | Gap, no_effect: float) -> bool | None:
     """Whether no effect lies strictly inside the interval; None where the interval does not tell.
 
-    A withheld limit is one at which a risk would pass 100%: an upper one lies beyond no effect.
+    An upper limit that is withheld since a risk would pass 100% lies beyond no effect; no other one tells.
     """
     if isinstance(interval, Gap) or isinstance(interval.low, Gap):
+        return None
+    if isinstance(interval.high, Gap) and interval.high.key != "beyond-one":
         return None
     beyond = isinstance(interval.high, Gap) or interval.high > no_effect
     return interval.low < no_effect and beyond

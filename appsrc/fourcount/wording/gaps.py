@@ -26,6 +26,7 @@ GAP_TEXTS = {
     "the score family gives one.",
     "beyond-one": "The risk would pass 100% here.",
     "carried-beyond-zero": "The risk would fall below 0% here.",
+    "next-to-certain": "Those without the exposure would have a risk so near 100% that nothing can be told from it.",
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     "no-discordant-pairs": "All pairs agree, so their odds ratio is not determined: only pairs that differ tell.",
     "concordant-pairs-unknown": "Only the pairs that differ were typed: without those that agree no risk follows.",

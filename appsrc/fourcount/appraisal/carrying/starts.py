@@ -49,9 +49,11 @@ class Start:
         return own, None if isinstance(own, Gap) else level
 
     def own_limits(self, level: float) -> Interval | Gap:
-        """Its own limits at a level; those of another level go there along Wilson's scale."""
+        """Its own limits at a level; typed ones of another level go there along Wilson's scale."""
         if self.limits is None:
             return BARE
+        if self.typed is not None and self.typed_level == level:
+            return self.typed
         z = quantile(level)
         return Interval(low=self.limits.at(-z), high=self.limits.at(z))
 
