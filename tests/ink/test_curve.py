@@ -22,6 +22,7 @@ from fourcount.ink.curve_layout import CurveLayout, dash_of
 from fourcount.ink.curve_sheet import Sheet
 from fourcount.ink.palette import DARK, LIGHT, PAPER, contrast
 from fourcount.picture.curve_axes import reach_for
+from fourcount.picture.places import crosses
 from fourcount.record.outcome import Outcome, Patient
 from fourcount.record.paper import Choices, Record
 from fourcount.wording.curve import View, curve_words, shown_lines, views
@@ -116,6 +117,78 @@ def test_no_text_lies_on_another(rising: Outcome, zoom: float, place: int, whole
         for x2, y2, wide2, _, size2 in texts[i + 1 :]:
             apart = x + wide <= x2 or x2 + wide2 <= x or abs(y - y2) >= min(size, size2)
             assert apart
+
+
+@pytest.mark.parametrize("zoom", [1.0, 1.5, 2.0])
+@pytest.mark.parametrize("place", [0, 1, 2])
+def test_names_of_points_are_clear_of_axes_and_lines(outcome: Outcome, zoom: float, place: int) -> None:
+    """At every text size, in a window of 1,280 by 800, nothing is drawn through them."""
+    sheet = Sheet(1160, 520, zoom)
+    notes = laid(outcome, place, sheet=sheet)
+    boxes = [
+        (x, y - size * 0.65, x + wide, y + size * 0.65)
+        for x, y, wide, text, size in notes.texts
+        if text in ("study, 17.1%", "patient, 12%")
+    ]
+    lines = [[notes.where(*value) for value in points] for points, *_ in notes.lines]
+    assert len(boxes) == 2
+    assert all(box[0] > notes.box[0] and box[1] > notes.box[1] for box in boxes)
+    assert not [line for line in lines for box in boxes if crosses(box, line)]
+
+
+@pytest.mark.parametrize("zoom", [1.0, 2.0])
+@pytest.mark.parametrize("size", [(360, 240), (760, 460), (20, 10)])
+@pytest.mark.parametrize("foot", [(), FOOT])
+@pytest.mark.parametrize("typed", ["a fall that led to a fracture, ", "x", "\u5149", "W "])
+def test_words_of_any_length_leave_room_for_the_curve(
+    rising: Outcome, zoom: float, size: tuple[int, int], foot: tuple[str, ...], typed: str
+) -> None:
+    """2,000 characters of each keep on the sheet, apart, with a sign where they are cut; the axes keep their room."""
+    fields = ("left_words_text", "first_label_text", "second_label_text", "span_text", "name_text")
+    outcome = msgspec.structs.replace(rising, **dict.fromkeys(fields, (typed * 2000)[:2000]))
+    for place in range(4):
+        notes = Notes()
+        layout = CurveLayout(*parts(outcome, place), LIGHT, Sheet(size[0] * zoom, size[1] * zoom, zoom, foot=foot))
+        sheet = layout.grow(notes)
+        layout.draw(notes)
+        left, low, right, high = notes.box
+        assert right - left >= 100 * zoom
+        assert high - low >= 70 * zoom
+        assert any("…" in text for *_, text, _ in notes.texts)
+        for i, (x, y, wide, _, tall) in enumerate(notes.texts):
+            assert x >= 0
+            assert x + wide <= sheet.width
+            assert y - tall / 2 >= 0
+            assert y + tall / 2 <= sheet.height
+            for x2, y2, wide2, _, tall2 in notes.texts[i + 1 :]:
+                assert x + wide <= x2 or x2 + wide2 <= x or abs(y - y2) >= min(tall, tall2)
+
+
+@pytest.mark.parametrize("kind", ["png", "svg", "pdf"])
+def test_words_of_any_length_are_drawn(outcome: Outcome, kind: Format) -> None:
+    """Also with real letters; a drawing says the whole of what it cuts where it is described."""
+    span = "within two years and a day " * 74
+    outcome = msgspec.structs.replace(outcome, span_text=span, name_text=span, left_words_text=span)
+    for sheet in (Sheet(360, 240), Sheet(500, 340, foot=FOOT)):
+        data = made(outcome, kind, sheet)
+        if kind == "svg":
+            described = re.search(r"<dc:description>(.*?)</dc:description>", data.decode(), re.DOTALL)
+            assert described is not None
+            assert described[1].count(span.strip()) >= 2
+
+
+def test_a_page_grows_with_its_texts(outcome: Outcome) -> None:
+    """The curve has the room that was asked for, whatever stands above and under it."""
+    heights, rooms = [], []
+    for foot in (FOOT, FOOT * 40):
+        notes = Notes()
+        layout = CurveLayout(*parts(outcome), LIGHT, Sheet(500, 340, foot=foot))
+        heights.append(layout.grow(notes).height)
+        layout.draw(notes)
+        rooms.append(notes.box[3] - notes.box[1])
+    assert heights[0] > 340
+    assert heights[1] > heights[0] + 39 * 10
+    assert rooms[0] == pytest.approx(rooms[1])
 
 
 def test_lines_are_told_without_colour(outcome: Outcome) -> None:

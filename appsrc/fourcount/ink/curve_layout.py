@@ -28,7 +28,7 @@ from fourcount.ink.curve_sheet import (
 )
 from fourcount.ink.palette import Palette
 from fourcount.picture import curve_axes
-from fourcount.picture.places import Box, Drawn, Value, place_beside, shared
+from fourcount.picture.places import Box, Drawn, Value, leads_to, place_beside, shared
 from fourcount.wording import numbers
 from fourcount.wording.curve import CurveWords, View, shown_lines
 
@@ -93,8 +93,9 @@ class CurveLayout:
 
     def grow(self, pen: Pen) -> Sheet:
         """The sheet as large as it has to be: a page has its texts beyond the room for its curve."""
-        sheet, least = self.sheet, (self.px(LEAST[0]), self.px(LEAST[1]))
-        self.sheet = sheet._replace(width=max(sheet.width, least[0]), height=max(sheet.height, least[1]))
+        sheet, margins = self.sheet, 2 * (self.margin - self.px(MARGIN))
+        wide, tall = (self.px(length) + margins for length in LEAST)
+        self.sheet = sheet._replace(width=max(sheet.width, wide), height=max(sheet.height, tall))
         if sheet.foot:
             texts = sum(block.height for block in (*self._head(pen), *self._end(pen)))
             self.sheet = self.sheet._replace(height=self.sheet.height + texts)
@@ -232,9 +233,12 @@ class CurveLayout:
             if not isinstance(point.low, Gap) and not isinstance(point.high, Gap) and self._fits(point.low, point.high)
         ]
         pen.area(rows, self.palette.accent, BAND)
-        for edge in ([(p.start, p.low) for p in line.points], [(p.start, p.high) for p in line.points]):
-            points = [(x, y) for x, y in edge if not isinstance(y, Gap) and self._fits(y)]
-            pen.line(points, self.palette.accent, self.px(0.9))
+        for edge in self._edges(line):
+            pen.line(edge, self.palette.accent, self.px(0.9))
+
+    def _edges(self, line: CurveLine) -> list[list[Value]]:
+        ends = ([(p.start, p.low) for p in line.points], [(p.start, p.high) for p in line.points])
+        return [[(x, y) for x, y in edge if not isinstance(y, Gap) and self._fits(y)] for edge in ends]
 
     def _drawn(self, line: CurveLine) -> list[Value]:
         """The values of a line that are there; what is missing lies beyond its ends."""
@@ -327,15 +331,15 @@ class CurveLayout:
             place = place_beside(at, (wide, size * LINE), reach, upwards=above, drawn=Drawn(room, taken, paths))
             taken.append(place)
             middle = (place[1] + place[3]) / 2
-            near = min(max(at[0], place[0]), place[2])
-            if abs(middle - at[1]) > 1.5 * size * LINE or abs(near - at[0]) > 2 * reach:
-                end = middle if abs(middle - at[1]) < size else place[1] if middle > at[1] else place[3]
-                pen.stroke([at, (near, end)], self.palette.ink, self.px(0.8))
+            end = leads_to(at, place)
+            if max(abs(end[0] - at[0]), abs(end[1] - at[1])) > 2 * reach:
+                pen.stroke([at, end], self.palette.ink, self.px(0.8))
             pen.text(place[0], middle, name, size, self.palette.ink, ground=self.palette.page)
 
     def _all_drawn(self) -> list[list[Value]]:
-        """Every line there is: of effects, of no difference, and the bars of points."""
+        """Every line there is: of effects, a band's edges, of no difference, and the bars of points."""
         found = [self._drawn(line) for line in self.lines]
+        found += self._edges(next(line for line in self.lines if self._chosen(line)))
         found += [[(0.0, y), (self.curve.reach, y)] for y in (1.0, self._odds()) if self.view.ratios and y is not None]
         if not self.view.ratios:
             found.append([(0.0, 0.0), (self.curve.reach, self.curve.reach)])
