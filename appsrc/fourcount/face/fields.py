@@ -224,7 +224,8 @@ class FieldsView(QWidget):
 class ChoiceField(QComboBox):
     """A choice among a few, shown as its value with a small triangle over a hairline.
 
-    ``notes`` say in the list, and only there, what each choice stands for.
+    ``notes`` say in the list, and only there, what each choice stands for. Disabled it is a text to read, without
+    triangle and hairline.
 
     **Signals**
         chosen: a person chose. Carries the key of the choice.
@@ -312,11 +313,12 @@ class ChoiceField(QComboBox):
         painter.setPen(QPen(self._look.colour("muted" if quiet else "ink")))
         words = self._shown_words(text_area.width())
         painter.drawText(text_area, Qt.AlignmentFlag.AlignLeft | Qt.AlignmentFlag.AlignVCenter, words)
-        painter.drawText(self.rect(), Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter, "▾")
+        if self.isEnabled():
+            painter.drawText(self.rect(), Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter, "▾")
         if self._notes:
             used = self.fontMetrics().horizontalAdvance(words) + self._look.px(10)
             self._draw_note(painter, text_area.adjusted(used, 0, 0, 0))
-        if not self._plain or self.hasFocus():
+        if self.isEnabled() and (not self._plain or self.hasFocus()):
             draw_underline(self, painter, self._look)
         painter.end()
 
