@@ -159,6 +159,42 @@ def test_the_same_numbers_are_a_table(example: Hands, shown: CurveWindow) -> Non
     assert shown.table.isHidden()
 
 
+@pytest.mark.parametrize("zoom", [1.0, 1.5, 2.0])
+def test_heads_of_the_table_are_seen_whole(example: Hands, shown: CurveWindow, zoom: float) -> None:
+    """However many lines a head takes in its column, at every text size; no row is cut either."""
+    example.window.look.set_zoom(zoom)
+    example.click(shown.numbers)
+    table, head = shown.table, shown.table.horizontalHeader()
+
+    def room(column: int) -> int:
+        text = table.horizontalHeaderItem(column).text()
+        return head.fontMetrics().boundingRect(
+            0, 0, table.columnWidth(column) - 8, 0, Qt.TextFlag.TextWordWrap.value, text
+        ).height()  # fmt: skip
+
+    example.qtbot.waitUntil(lambda: head.font() == example.window.look.font("body"))
+    example.qtbot.waitUntil(lambda: all(head.height() >= room(column) for column in range(table.columnCount())))
+    assert any(room(column) > head.fontMetrics().height() for column in range(table.columnCount()))
+    example.qtbot.waitUntil(lambda: table.height() >= head.height() + table.verticalHeader().length())
+
+
+@pytest.mark.parametrize("view", [0, 1, 2, 3])
+@pytest.mark.parametrize(("zoom", "size"), [(1.0, (360, 300)), (2.0, (700, 600)), (2.0, (480, 400))])
+def test_words_of_any_length_are_no_error_in_a_small_window(
+    example: Hands, shown: CurveWindow, zoom: float, size: tuple[int, int], view: int
+) -> None:
+    """Whatever is typed, the drawing is made and the description has all of it."""
+    span = "within two years and a day " * 74
+    for field in ("span_text", "name_text", "left_words_text", "first_label_text", "second_label_text"):
+        example.window.session.edit_text(field, span)
+    example.window.look.set_zoom(zoom)
+    shown.resize(*size)
+    choose(example, shown, shown.view.itemText(view))
+    assert shown.canvas.accessibleDescription().count(span.strip()) >= 1
+    example.click(shown.copy)
+    assert shown.notice.text() == labels.COPIED
+
+
 def test_a_screen_reader_hears_all_of_it(shown: CurveWindow) -> None:
     """The drawing is one object with a name and a description; every control has a name."""
     assert shown.canvas.accessibleName() == "Across starting risks: had the event"
@@ -191,6 +227,20 @@ def test_it_is_saved_with_its_cautions(
     assert data.startswith(begins)
     if name == "a.svg":
         assert b"Does not recommend" in data
+
+
+def test_a_file_has_the_cautions_of_its_own_view(
+    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch, tmp_path: Path
+) -> None:
+    """The odds ratio as a risk ratio is not told that the risk ratio is kept."""
+    example.window.session.edit_text("starting_risk_text", "5%")
+    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / "a.svg"))
+    choose(example, shown, ODDS)
+    example.click(shown.save)
+    text = " ".join((tmp_path / "a.svg").read_text(encoding="utf-8").split())
+    assert "The odds ratio is kept the same at every starting risk." in text
+    assert "outside half to twice" in text
+    assert "assumed to be the same" not in text
 
 
 def test_a_folder_that_cannot_be_written_is_a_sentence(
