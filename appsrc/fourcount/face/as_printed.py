@@ -8,7 +8,8 @@ from PySide6.QtCore import Qt, Signal
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.grid import Grid
 from fourcount.face.grid_forms import GRID_FORMS
@@ -186,8 +187,9 @@ class AsPrinted(FieldsView):
             from fourcount.wording.gaps import mark_text
 
             reasons = {mark.field: mark_text(mark) for mark in findings.marks}
-        told = [field.field for field in self.grid.fields]
-        for field in self.grid.fields:
+        marked = (*self.grid.fields, self.span)
+        told = [field.field for field in marked]
+        for field in marked:
             field.show_mark(reasons.get(field.field, ""))
         told += self._rare.show_marks(reasons) if self._rare else []
         self.notes.show_words("\n".join(dict.fromkeys(text for field, text in reasons.items() if field in told)))

@@ -27,6 +27,7 @@ from fourcount.appraisal.findings import (
 from fourcount.appraisal.measures import number_needed_from
 from fourcount.appraisal.reach import risk_within_reach
 from fourcount.appraisal.turning import welcome_of_effects
+from fourcount.record.entry.duration import marks_of_study_span
 from fourcount.record.entry.readings import RiskReading
 from fourcount.record.entry.starts import StartReading
 from fourcount.record.outcome import Outcome
@@ -62,8 +63,8 @@ def for_a_patient(study: Study, reading: StartReading) -> ForAPatient:
 
 
 def marks_of(outcome: Outcome, reading: StartReading) -> tuple[Mark, ...]:
-    """The marks of the patient's fields, whether or not anything is carried."""
-    return reading.marks + mark_of_span(outcome)
+    """The marks of the patient's fields and of the study's span, whether or not anything is carried."""
+    return reading.marks + mark_of_span(outcome) + marks_of_study_span(outcome.span_text)
 
 
 def _patient(study: Study, one: Carriable | None, starts: Starts, spans: Spans | Gap) -> PatientFindings | Gap:
