@@ -8,7 +8,8 @@ from PySide6.QtCore import QObject, Qt
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QWidget
 
-from fourcount.face.fields import ChoiceField, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import TextField
 from fourcount.record.outcome import CELLS
 
 if TYPE_CHECKING:

@@ -22,6 +22,8 @@ if TYPE_CHECKING:
 WIDTH, HEIGHT = 760, 490
 """Of a page without the texts above and under its curve, for which it grows."""
 
+NO_REASON = ("", "unknown error")
+
 FORMATS: dict[str, Format] = {".png": "png", ".svg": "svg", ".pdf": "pdf"}
 
 
@@ -52,6 +54,8 @@ def write(path: str, data: bytes) -> str:
     if file.open(QIODevice.OpenModeFlag.WriteOnly) and file.write(data) == len(data) and file.commit():
         return labels.SAVED.format(name=target.name)
     reason = file.errorString().rstrip(".").lower()
+    if reason in NO_REASON:  # a write that stopped in its middle leaves none
+        reason = labels.NO_ROOM
     return labels.NOT_SAVED.format(folder=specimen(str(target.parent)), reason=reason)
 
 

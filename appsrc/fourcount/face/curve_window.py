@@ -14,9 +14,9 @@ from fourcount.appraisal.curve import curve, highest_start
 from fourcount.appraisal.findings.curve import Curve
 from fourcount.face import curve_file
 from fourcount.face.buttons import Button
+from fourcount.face.choice_field import ChoiceField
 from fourcount.face.curve_parts import CurveCanvas, CurveTable
 from fourcount.face.curve_worker import CurveWorker
-from fourcount.face.fields import ChoiceField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.links import Link
 from fourcount.face.look import family_in_use

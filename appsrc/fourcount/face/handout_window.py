@@ -12,7 +12,7 @@ from PySide6.QtWidgets import QDialog, QHBoxLayout, QScrollArea, QVBoxLayout, QW
 
 from fourcount.face import handout_dialogs
 from fourcount.face.buttons import Button
-from fourcount.face.fields import ChoiceField
+from fourcount.face.choice_field import ChoiceField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.handout_pages import Candidate, candidates, page_of
 from fourcount.face.handout_print import print_page

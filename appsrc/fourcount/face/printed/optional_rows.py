@@ -7,7 +7,8 @@ from typing import NamedTuple
 from PySide6.QtCore import Qt, Signal
 from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.look import Look
 from fourcount.face.printed.quiet_link import QuietLink
 from fourcount.face.text import Words
