@@ -8,7 +8,7 @@ from pathlib import Path
 from typing import TYPE_CHECKING
 
 import pytest
-from PySide6.QtCore import Qt
+from PySide6.QtCore import QSaveFile, Qt
 from PySide6.QtGui import QGuiApplication, QImage
 from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QTableWidget, QWidget
@@ -255,6 +255,20 @@ def test_a_folder_that_cannot_be_written_is_a_sentence(
     monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / "curve.png"))
     example.click(shown.save)
     assert (tmp_path / "curve.png").exists()
+
+
+def test_a_full_disk_is_a_sentence(monkeypatch: pytest.MonkeyPatch, tmp_path: Path) -> None:
+    """A write that stops in its middle leaves what was there before and says what may be the matter."""
+
+    class Full(QSaveFile):
+        def write(self, data: bytes) -> int:
+            return len(data) // 2
+
+    (tmp_path / "curve.png").write_bytes(b"before")
+    monkeypatch.setattr(curve_file, "QSaveFile", Full)
+    said = curve_file.write(str(tmp_path / "curve.png"), b"after")
+    assert said.endswith(": the disk may be full.")
+    assert (tmp_path / "curve.png").read_bytes() == b"before"
 
 
 def test_another_kind_of_file_is_a_sentence(
