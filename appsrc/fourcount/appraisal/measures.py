@@ -82,6 +82,14 @@ def number_needed_from(difference: Figure, *, welcome: bool, beside: bool = Fals
     return interval if isinstance(interval, Gap) else number_needed(estimate, interval, unwelcome=not welcome)
 
 
+def number_needed_alone(difference: float, reason: Gap, *, welcome: bool) -> NumberNeededRange:
+    """The number needed of a difference without any interval: both limits are withheld, for the one reason."""
+    needed = number_needed(difference, Interval(low=difference, high=difference), unwelcome=not welcome)
+    return NumberNeededRange(
+        estimate=needed.estimate, kind=needed.kind, low=reason, high=reason, through_infinity=False
+    )
+
+
 def _half_known(difference: float, interval: Range, *, welcome: bool, beside: bool) -> NumberNeededRange:
     """A limit without end, whose reciprocal is 0, stands in for the one withheld; beside 0 it is 0 itself."""
     stand_in = 0.0 if beside else math.inf

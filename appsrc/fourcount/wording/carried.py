@@ -118,7 +118,7 @@ def needed_value(needed: AnyNumberNeeded) -> str:
 
 def _needed(needed: AnyNumberNeeded) -> str:
     value, interval = numbers.number_needed(needed.estimate), limits.number_needed_interval(needed)
-    return value if interval == NO_WIDTH_NEEDED else f"{value} ({interval})"
+    return value if interval == NO_WIDTH_NEEDED else f"{value}{limits.bracketed(interval)}"
 
 
 def relative_words(patient: PatientFindings) -> str:

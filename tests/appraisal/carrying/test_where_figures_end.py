@@ -10,6 +10,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Conversion, Gap, Interval, NumberNeededRange, PatientFindings
 from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
+from fourcount.wording.carried import needed_value
 
 
 def found(outcome, **typed):
@@ -113,3 +114,27 @@ def test_typed_limits_come_back_as_typed():
     """At their own level, to the last bit."""
     without = found(of_total(), starting_risk_text="12% (9 to 15)").patient.without
     assert without.interval == Interval(low=0.09, high=0.15)
+
+
+@pytest.mark.parametrize(
+    ("outcome", "typed", "reason"),
+    [
+        (effect_only("risk_ratio", "0.54"), {"starting_risk_text": "12%"}, "no-interval-printed"),
+        (of_total(icc_text="", cluster_size_text="21"), {"starting_risk_text": "12%"}, "cluster-without-icc"),
+        (effect_only("risk_ratio", "1.2 (1.05 to 1.3)"), {"starting_risk_text": "83%"}, None),
+    ],
+)
+def test_a_number_needed_without_a_range_stands_alone(outcome, typed, reason):
+    """Papers that print a bare ratio are read for this one figure; both of its limits say why they are not there."""
+    patient = found(outcome, **typed).patient
+    needed = patient.number_needed
+    assert needed.estimate == pytest.approx(1 / abs(patient.difference.estimate))
+    if reason is not None:
+        assert (needed.low, needed.high, needed.through_infinity) == (Gap(reason), Gap(reason), False)
+    assert needed_value(needed).startswith(f"{needed.kind} ")
+
+
+def test_the_studys_own_number_needed_stays_withheld_with_its_interval():
+    """There the row of the study says why, and the patient's figures are the study's."""
+    findings = found(of_total(icc_text="", cluster_size_text="21"))
+    assert findings.patient.number_needed == findings.measures["number_needed"] == Gap("cluster-without-icc")

@@ -24,7 +24,7 @@ from fourcount.appraisal.findings import (
     PatientFindings,
     Range,
 )
-from fourcount.appraisal.measures import number_needed_from
+from fourcount.appraisal.measures import number_needed_alone, number_needed_from
 from fourcount.appraisal.reach import risk_within_reach
 from fourcount.appraisal.turning import welcome_of_effects
 from fourcount.record.entry.duration import marks_of_study_span
@@ -83,9 +83,14 @@ def _at(study: Study, one: Carriable, start: Start | Gap, spans: Spans | Gap) ->
         return start
     if isinstance(spans, Gap):
         return spans
-    if start.origin == "reference" and study.own is not None and not one.adjusted:
+    if study.own is not None and _the_tables_own(study, one, start):
         return _by_the_table(study, study.own, one, start, spans)
     return _by_the_effect(study, one, start, spans)
+
+
+def _the_tables_own(study: Study, one: Carriable, start: Start) -> bool:
+    """Whether the figures are the table's: its own risk, and an effect of its own."""
+    return start.origin == "reference" and study.own is not None and not one.adjusted
 
 
 def _by_the_table(study: Study, own: OwnRisks, one: Carriable, start: Start, spans: Spans) -> PatientFindings | Gap:
@@ -168,12 +173,23 @@ def _whole(own: Figure) -> Interval | Gap:
 
 
 def _number_needed(study: Study, one: Carriable, start: Start, difference: Figure) -> AnyNumberNeeded | Gap:
-    """The patient's number needed; follow-up of different lengths touches the table's own risks and no hazards."""
+    """The patient's number needed; where only its range cannot be given, the estimate stands.
+
+    Follow-up of different lengths touches effects of raw counts and the table's own risks, and no hazards.
+    """
     apart = study.number_needed == "follow-up-varied" and one.effect in ANY_SPAN and start.origin != "reference"
     if study.number_needed is not None and not apart:
         return Gap(study.number_needed)
+    interval, estimate = difference.interval, difference.estimate
+    if (
+        isinstance(interval, Gap)
+        and not isinstance(estimate, Gap)
+        and estimate
+        and not _the_tables_own(study, one, start)
+    ):
+        return number_needed_alone(estimate, interval, welcome=welcome_of_effects(study.outcome))
     return number_needed_from(
-        difference, welcome=welcome_of_effects(study.outcome), beside=_stays_on_its_side(one, difference.interval)
+        difference, welcome=welcome_of_effects(study.outcome), beside=_stays_on_its_side(one, interval)
     )
 
 
