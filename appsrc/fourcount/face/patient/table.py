@@ -48,6 +48,8 @@ class PatientTable(QTableWidget):
         self._look = look
         self._rows: tuple[Row, ...] = ()
         self._head: Row | None = None
+        self._named: tuple[object, ...] = ()
+        self._reasons: dict[int, int] = {}
         self._corner = ""
         self._laid: dict[int, list[Line]] = {}
         policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
@@ -131,19 +133,38 @@ class PatientTable(QTableWidget):
     def _fill(self, head: Row) -> None:
         """The cells as they are heard; of one starting risk its name stands before the row alone."""
         first = 0 if len(self._rows) > 1 else 1
-        self.clearSpans()
         self.setRowCount(len(self._rows))
         self.setColumnCount(len(head) - first)
-        self.setHorizontalHeaderLabels(head[first:])
-        self.setVerticalHeaderLabels([row.label for row in self._rows])
+        named = (head[first:], *(row.label for row in self._rows))
+        if named != self._named:  # a key at a time, most of it stays as it is
+            self._named = named
+            self.setHorizontalHeaderLabels(head[first:])
+            self.setVerticalHeaderLabels([row.label for row in self._rows])
+        reasons = {}
         for place, row in enumerate(self._rows):
             texts = [text for text in row[first:] if text]
             for column, text in enumerate(row[first:]):
-                self.setItem(place, column, QTableWidgetItem(text or texts[-1]))
-            if len(texts) < self.columnCount():  # a reason instead of figures
-                self.setSpan(place, len(texts) - 1, 1, self.columnCount() - len(texts) + 1)
+                self._put(place, column, text or texts[-1])
+            if len(texts) < self.columnCount():
+                reasons[place] = len(texts) - 1
+        self._span(reasons)
         if self.currentRow() < 0:
             self.setCurrentCell(0, 0)
+
+    def _span(self, reasons: dict[int, int]) -> None:
+        """Give what is said instead of figures the room of all of them; ``reasons`` has its column by its row."""
+        if reasons != self._reasons:
+            self._reasons = reasons
+            self.clearSpans()
+            for row, column in reasons.items():
+                self.setSpan(row, column, 1, self.columnCount() - column)
+
+    def _put(self, row: int, column: int, text: str) -> None:
+        item = self.item(row, column)
+        if item is None:
+            self.setItem(row, column, QTableWidgetItem(text))
+        elif item.text() != text:
+            item.setText(text)
 
     def _fit(self) -> None:
         """Give rows and columns the places at which they are painted."""
