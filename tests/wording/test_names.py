@@ -106,7 +106,7 @@ def test_a_column_without_a_name_keeps_its_own_words(outcome_of, counted, left, 
     outcome = outcome_of(counted=counted, left_words_text=left, right_words_text=right, **headings)
     assert (names.event_words(outcome), names.other_words(outcome)) == (event, other)
     assert names.event_key(outcome) == event
-    assert names.other_key(outcome) == (f"did not have the outcome “{event}”" if other == "did not" else other)
+    assert names.other_key(outcome) == ("all others" if other == "did not" else other)
 
 
 def test_the_other_outcome_follows_what_is_counted(outcome_of):

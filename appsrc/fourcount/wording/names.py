@@ -4,7 +4,6 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING, Literal
 
-from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import (
     Column,
     Design,
@@ -44,6 +43,7 @@ EXPOSED: dict[Column, str] = {"left": "was exposed", "right": "was not exposed"}
 NAMED_EVENT = "had the event “{heading}”"
 WITHOUT = "did not have the outcome “{outcome}”"
 DID_NOT = "did not"
+ALL_OTHERS = "all others"
 VERBS = ("did", "had", "was", "were", "got")  # a heading that begins so is a sentence's words already
 NOT_COUNTED = (Pairs, PersonTime, RiskAtTime, EffectOnly)
 """Tables whose figures are not shares of people who were followed alike."""
@@ -159,8 +159,16 @@ def event_key(outcome: Outcome) -> str:
 
 
 def other_key(outcome: Outcome) -> str:
-    """The other outcome in a picture's key, where a bare "did not" would say nothing."""
-    return event_key(count_other_outcome(outcome))
+    """The other outcome in a picture's key, beside that of the event; only of nouns is it said what people lack."""
+    heading, words = bare(outcome.other_heading_text), bare(outcome.other_words_text)
+    if heading:
+        return event_names.without_unit(heading)
+    if words:
+        return event_names.of_people(words) or words
+    event = _event_name(outcome)
+    if event:
+        return event_names.lacked_by(event) or ALL_OTHERS
+    return _stand_ins(outcome)[_other_column(outcome)]
 
 
 def _unnamed_event(outcome: Outcome) -> str:

@@ -162,7 +162,7 @@ def _key(outcome: Outcome, asked: Asked, said: Said) -> tuple[KeyEntry, ...]:
     event, other = (other, event) if said.turned else (event, other)
     event, other = said.event or event, said.other or other
     if asked.arrangement == "one":
-        event, other = EITHER_WAY.format(words=event), EITHER_WAY.format(words=other)
+        event, other = _either_way(event), _either_way(other)
     return (
         KeyEntry("affected", event),
         KeyEntry("added", said.added or _changed("added", outcome, said)),
@@ -170,6 +170,11 @@ def _key(outcome: Outcome, asked: Asked, said: Said) -> tuple[KeyEntry, ...]:
         KeyEntry("avoided", said.avoided or _changed("avoided", outcome, said)),
         KeyEntry("others", other),
     )
+
+
+def _either_way(words: str) -> str:
+    """Of one picture for both groups; who is left when all states are named is that either way."""
+    return words if words == names.ALL_OTHERS else EITHER_WAY.format(words=words)
 
 
 def _changed(verb: str, outcome: Outcome, said: Said) -> str:
