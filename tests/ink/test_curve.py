@@ -3,9 +3,11 @@
 from __future__ import annotations
 
 import gc
+import math
 import os
 import re
 import weakref
+from itertools import pairwise
 from pathlib import Path
 
 import msgspec
@@ -23,7 +25,7 @@ from fourcount.ink.curve_sheet import Sheet
 from fourcount.ink.palette import DARK, LIGHT, PAPER, contrast
 from fourcount.picture.curve_axes import reach_for
 from fourcount.picture.places import crosses
-from fourcount.record.outcome import Outcome, Patient
+from fourcount.record.outcome import CELLS, Outcome, Patient
 from fourcount.record.paper import Choices, Record
 from fourcount.wording.curve import View, curve_words, shown_lines, views
 from fourcount.wording.example import worked_example
@@ -162,6 +164,24 @@ def test_words_of_any_length_leave_room_for_the_curve(
             assert y + tall / 2 <= sheet.height
             for x2, y2, wide2, _, tall2 in notes.texts[i + 1 :]:
                 assert x + wide <= x2 or x2 + wide2 <= x or abs(y - y2) >= min(tall, tall2)
+
+
+@pytest.mark.parametrize("place", [0, 1, 2, 3])
+@pytest.mark.parametrize("counts", [(60, 140, 22, 178), (38, 374, 70, 339), (1, 399, 40, 360), (150, 50, 20, 180)])
+def test_marks_of_the_axes_keep_apart_on_the_smallest_sheet(
+    outcome: Outcome, counts: tuple[int, ...], place: int
+) -> None:
+    """A mark has the height of its words to itself, in even and in logarithmic axes."""
+    table = msgspec.structs.replace(outcome.table, **dict(zip(CELLS, map(str, counts), strict=True)))
+    for zoom in (1.0, 2.0):
+        notes = laid(
+            msgspec.structs.replace(outcome, table=table), place, sheet=Sheet(360 * zoom, 240 * zoom, zoom)
+        )  # fmt: skip
+        places = [math.log(mark) if place == 3 else mark for mark in notes.up.values]
+        ends = (math.log(notes.up.low), math.log(notes.up.high)) if place == 3 else (notes.up.low, notes.up.high)
+        dots = (notes.box[3] - notes.box[1]) / (ends[1] - ends[0])
+        assert len(places) >= 2
+        assert all((after - before) * dots >= 12 * 1.2 * zoom for before, after in pairwise(places))
 
 
 @pytest.mark.parametrize("kind", ["png", "svg", "pdf"])

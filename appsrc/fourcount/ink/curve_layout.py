@@ -4,8 +4,7 @@ from __future__ import annotations
 
 from typing import NamedTuple
 
-from fourcount.appraisal.findings import Gap
-from fourcount.appraisal.findings.curve import Curve, CurveLine, CurveMark
+from fourcount.appraisal.findings.curve import Curve, CurveLine
 from fourcount.ink.curve_sheet import (
     BAND,
     BODY,
@@ -20,17 +19,16 @@ from fourcount.ink.curve_sheet import (
     STRONG,
     TALL,
     Dash,
-    Marks,
     Pen,
     Shape,
     Sheet,
     wrapped,
 )
+from fourcount.ink.curve_values import CurveValues
 from fourcount.ink.palette import Palette
 from fourcount.picture import curve_axes
 from fourcount.picture.places import Box, Drawn, Value, leads_to, place_beside, shared
-from fourcount.wording import numbers
-from fourcount.wording.curve import CurveWords, View, shown_lines
+from fourcount.wording.curve import CurveWords, View
 
 DASHES: dict[str, Dash] = {
     "risk_ratio": (),
@@ -73,11 +71,10 @@ class CurveLayout:
 
     def __init__(self, curve: Curve, view: View, words: CurveWords, palette: Palette, sheet: Sheet) -> None:
         self.curve = curve
-        self.view = view
+        self.values = CurveValues(curve, view)
         self.words = words
         self.palette = palette
         self.sheet = sheet
-        self.lines = shown_lines(curve, view)
         self.margin = self.px(PAGE_MARGIN if sheet.foot else MARGIN)
 
     @property
@@ -112,10 +109,13 @@ class CurveLayout:
             under = floor
             for block in end:
                 under = self._put(pen, self.margin, under, block)
-        if not self.lines:
+        if not self.values.lines:
             self._put(pen, self.margin, top, self._block(pen, " ".join(self.words.notes), BODY, self.palette.muted))
             return
-        across, up = self._across(), self._up()
+        across, up = (
+            self.values.across(6 if self.sheet.zoom < 1.5 else 4),
+            self.values.up(6 if top - floor > self.px(TALL / 1.2) else 4),
+        )
         left = self.margin + max(pen.width(word, self.px(SMALL)) for word in up.words) + self.px(GAP)
         names = self._names(pen, top - floor)
         widest = max(pen.width(line, self.px(SMALL), name.strong) for name in names for line in name.lines)
@@ -127,7 +127,7 @@ class CurveLayout:
         self._put(pen, left, floor + below.height, below)
         marks = self.px(SMALL) * LINE + self.px(1.5 * GAP)
         box = (left, floor + below.height + marks, right, top - above.height - self.px(1.5 * GAP))
-        pen.set_axes(box, across, up, self.view.ratios, self.px(SMALL), self.palette)
+        pen.set_axes(box, across, up, self.values.ratios, self.px(SMALL), self.palette)
         self._draw_lines(pen)
         self._set_names(pen, names, box, (floor, top))
         self._draw_points(pen, box)
@@ -179,91 +179,29 @@ class CurveLayout:
         apart = sentence._replace(before=self.px(1.5 * GAP), after=self.px(GAP))
         return (apart, *(self._block(pen, text, FOOT, self.palette.muted) for text in notes))
 
-    # Axes
-
-    def _across(self) -> Marks:
-        values = curve_axes.even_marks(self.curve.reach, 6 if self.sheet.zoom < 1.5 else 4)
-        return Marks(0.0, self.curve.reach, values, tuple(numbers.percent_given(value) for value in values))
-
-    def _up(self) -> Marks:
-        """The axis holds all lines, the band of the one chosen, the points and the line of no difference."""
-        values = [value for line in self.lines for value in self._values(line)]
-        if not self.view.ratios:
-            marked = [value for mark in self.curve.marks for value in (mark.with_, self._bar(mark)[1])]
-            values += [value for value in marked if not isinstance(value, Gap)]
-            high = curve_axes.top_of(max((*values, self.curve.reach)))
-            rounds = curve_axes.even_marks(high)
-            return Marks(0.0, high, rounds, tuple(numbers.percent_given(value) for value in rounds))
-        odds = self.lines[0].effect.figure.estimate
-        positive = [value for value in (*values, odds, 1.0) if not isinstance(value, Gap) and value > 0]
-        low, high = curve_axes.ratio_ends(min(positive), max(positive))
-        rounds = curve_axes.ratio_marks(low, high)
-        return Marks(low, high, rounds, tuple(numbers.quantity(value) for value in rounds))
-
-    def _values(self, line: CurveLine) -> list[float]:
-        found = [point.value for point in line.points]
-        if self._chosen(line):
-            found += [end for point in line.points for end in (point.low, point.high)]
-        return [value for value in found if not isinstance(value, Gap)]
-
-    def _chosen(self, line: CurveLine) -> bool:
-        return self.view.ratios or line is self.lines[self.view.place]
-
     # Lines
 
     def _draw_lines(self, pen: Pen) -> None:
-        reach, palette = self.curve.reach, self.palette
-        for y in (1.0, self._odds()) if self.view.ratios else ():
-            if y is not None:
-                pen.line([(0.0, y), (reach, y)], palette.outline, self.px(1.2), NO_EFFECT)
-        if not self.view.ratios:
-            pen.line([(0.0, 0.0), (reach, reach)], palette.outline, self.px(1.2), NO_EFFECT)
-        chosen = next(line for line in self.lines if self._chosen(line))
-        self._draw_band(pen, chosen)
-        for line in self.lines:
-            if line is not chosen:
-                pen.line(self._drawn(line), palette.ink, self.px(1.3), dash_of(line))
-        pen.line(self._drawn(chosen), palette.accent, self.px(2.6), dash_of(chosen))
-
-    def _draw_band(self, pen: Pen, line: CurveLine) -> None:
-        """Filled where both limits are there, edged where one is."""
-        rows = [
-            (point.start, point.low, point.high)
-            for point in line.points
-            if not isinstance(point.low, Gap) and not isinstance(point.high, Gap) and self._fits(point.low, point.high)
-        ]
-        pen.area(rows, self.palette.accent, BAND)
-        for edge in self._edges(line):
-            pen.line(edge, self.palette.accent, self.px(0.9))
-
-    def _edges(self, line: CurveLine) -> list[list[Value]]:
-        ends = ([(p.start, p.low) for p in line.points], [(p.start, p.high) for p in line.points])
-        return [[(x, y) for x, y in edge if not isinstance(y, Gap) and self._fits(y)] for edge in ends]
-
-    def _drawn(self, line: CurveLine) -> list[Value]:
-        """The values of a line that are there; what is missing lies beyond its ends."""
-        return [(p.start, p.value) for p in line.points if not isinstance(p.value, Gap) and self._fits(p.value)]
-
-    def _fits(self, *values: float) -> bool:
-        """Whether values can stand on the axis: ratios of 0 cannot."""
-        return not self.view.ratios or all(value > 0 for value in values)
-
-    def _odds(self) -> float | None:
-        odds = self.lines[0].effect.figure.estimate
-        return None if isinstance(odds, Gap) or odds <= 0 else odds
+        palette, values = self.palette, self.values
+        for line in values.references:
+            pen.line(line, palette.outline, self.px(1.2), NO_EFFECT)
+        pen.area(values.band, palette.accent, BAND)
+        for edge in values.edges:
+            pen.line(edge, palette.accent, self.px(0.9))
+        for one in sorted(values.lines, key=lambda line: line is values.chosen):  # the chosen one lies above
+            colour, width = (palette.accent, 2.6) if one is values.chosen else (palette.ink, 1.3)
+            pen.line(values.of(one), colour, self.px(width), dash_of(one))
 
     # Names
 
     def _names(self, pen: Pen, height: float) -> list[Name]:
-        palette, reach, room = self.palette, self.curve.reach, self.inside * NAMES_SHARE
+        palette, values, room = self.palette, self.values, self.inside * NAMES_SHARE
         ends: list[tuple[str, bool, str, Value]] = [
-            (self.words.reference, False, palette.muted, (reach, 1.0 if self.view.ratios else reach))
+            (text, False, palette.muted, line[-1])
+            for text, line in zip((self.words.reference, self.words.itself), values.references, strict=False)
         ]
-        odds = self._odds() if self.view.ratios else None
-        if odds is not None:
-            ends.append((self.words.itself, False, palette.muted, (reach, odds)))
-        for line, name in zip(self.lines, self.words.names, strict=True):
-            drawn, chosen = self._drawn(line), self._chosen(line)
+        for line, name in zip(values.lines, self.words.names, strict=True):
+            drawn, chosen = values.of(line), line is values.chosen
             if drawn:
                 ends.append((name, chosen, palette.accent if chosen else palette.ink, drawn[-1]))
         size = self.px(SMALL)
@@ -291,32 +229,19 @@ class CurveLayout:
 
     # Points
 
-    def _bar(self, mark: CurveMark) -> tuple[float | Gap, float | Gap]:
-        """The limits that a patient is told, beside the line of the effect that is carried."""
-        if self.view.ratios or self.view.place != self.curve.carried or not mark.of_patient:
-            return Gap("bare-starting-risk"), Gap("bare-starting-risk")
-        return mark.low, mark.high
-
-    def _value(self, mark: CurveMark) -> float | Gap:
-        """Where a point stands: the study's on its own risks, a patient's on the line chosen."""
-        if mark.of_study and not self.view.ratios:
-            return mark.with_
-        chosen = next(line for line in self.lines if self._chosen(line))
-        return next(point.value for point in chosen.points if point.start == mark.without)
-
     def _draw_points(self, pen: Pen, box: Box) -> None:
         palette = self.palette
         shown: list[tuple[Value, str, bool]] = []
         for mark, name in zip(self.curve.marks, self.words.marks, strict=True):
-            y, (low, high) = self._value(mark), self._bar(mark)
-            if isinstance(y, Gap) or not self._fits(y):
+            y = self.values.at(mark)
+            if y is None:
                 continue
-            if not isinstance(low, Gap) and not isinstance(high, Gap):
-                pen.line([(mark.without, low), (mark.without, high)], palette.ink, self.px(1.6))
+            if bar := self.values.bar(mark):
+                pen.line(bar, palette.ink, self.px(1.6))
             own = mark.of_study and not mark.of_patient
             shape: Shape = "square" if mark.of_study else "round"
             pen.point(mark.without, y, shape, self.px(8), palette.page if own else palette.ink, palette.ink)
-            above = y > (1.0 if self.view.ratios else mark.without)
+            above = y > (1.0 if self.values.ratios else mark.without)
             shown.append((pen.where(mark.without, y), name, above))
         self._name_points(pen, shown, box)
 
@@ -325,29 +250,15 @@ class CurveLayout:
         reach, size = self.px(GAP), self.px(SMALL)
         taken = [(x - reach, y - reach, x + reach, y + reach) for (x, y), _, _ in shown]
         room = (box[0] + self.px(2), box[1] + self.px(2), box[2] + reach, box[3])
-        paths = [[pen.where(*value) for value in line] for line in self._all_drawn()]
+        paths = [[pen.where(*value) for value in line] for line in self.values.paths]
         for at, name, above in shown:
             wide = pen.width(name, size)
             place = place_beside(at, (wide, size * LINE), reach, upwards=above, drawn=Drawn(room, taken, paths))
             taken.append(place)
-            middle = (place[1] + place[3]) / 2
             end = leads_to(at, place)
             if max(abs(end[0] - at[0]), abs(end[1] - at[1])) > 2 * reach:
                 pen.stroke([at, end], self.palette.ink, self.px(0.8))
-            pen.text(place[0], middle, name, size, self.palette.ink, ground=self.palette.page)
-
-    def _all_drawn(self) -> list[list[Value]]:
-        """Every line there is: of effects, a band's edges, of no difference, and the bars of points."""
-        found = [self._drawn(line) for line in self.lines]
-        found += self._edges(next(line for line in self.lines if self._chosen(line)))
-        found += [[(0.0, y), (self.curve.reach, y)] for y in (1.0, self._odds()) if self.view.ratios and y is not None]
-        if not self.view.ratios:
-            found.append([(0.0, 0.0), (self.curve.reach, self.curve.reach)])
-        for mark in self.curve.marks:
-            low, high = self._bar(mark)
-            if not isinstance(low, Gap) and not isinstance(high, Gap):
-                found.append([(mark.without, low), (mark.without, high)])
-        return found
+            pen.text(place[0], (place[1] + place[3]) / 2, name, size, self.palette.ink, ground=self.palette.page)
 
 
 def dash_of(line: CurveLine) -> Dash:
