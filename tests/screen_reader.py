@@ -10,7 +10,7 @@ from collections import Counter
 from collections.abc import Iterator
 from dataclasses import dataclass
 
-from PySide6.QtCore import QEvent, QRect, Qt
+from PySide6.QtCore import QRect, Qt
 from PySide6.QtGui import QAccessible, QAccessibleInterface
 from PySide6.QtWidgets import QApplication, QWidget
 
@@ -74,7 +74,7 @@ def walk(interface: QAccessibleInterface | None, within_seen: bool = True) -> It
 
 def everything(widget: QWidget) -> list[Heard]:
     """The walk through a window, once it is laid out and its parts are in order."""
-    QApplication.sendPostedEvents(None, QEvent.Type.LayoutRequest)
+    QApplication.processEvents()
     if isinstance(widget, MainWindow):
         widget.reading.put_in_order()
     else:
@@ -129,6 +129,33 @@ def tab_order(window: QWidget) -> list[QWidget]:
             order.append(widget)
         widget = widget.nextInFocusChain()
     return order
+
+
+def names(widgets: list[QWidget]) -> list[str]:
+    """What these are called, or what they say."""
+    return [
+        f"{type(widget).__name__} {widget.accessibleName() or getattr(widget, 'text', str)()}" for widget in widgets
+    ]
+
+
+def one_of(found: list[Heard], kind: str) -> Heard:
+    """The one thing of a kind."""
+    (only,) = (one for one in found if one.kind == kind)
+    return only
+
+
+def rows_of_table(window: QWidget, kind: str) -> list[list[tuple[str, str, str]]]:
+    """Each row's cells: the head of its row, the head of its column, and what stands in it."""
+    (table,) = (widget for widget in window.findChildren(QWidget) if type(widget).__name__ == kind)
+    found = QAccessible.queryAccessibleInterface(table)
+    rows: dict[int, list[tuple[str, str, str]]] = {}
+    for place in range(found.childCount()):
+        child = found.child(place)
+        cell = child.tableCellInterface() if child.role() == Role.Cell else None
+        if cell is not None:
+            heads = (cell.rowHeaderCells()[0], cell.columnHeaderCells()[0], child)
+            rows.setdefault(cell.rowIndex(), []).append(tuple(one.text(QAccessible.Text.Name) for one in heads))
+    return list(rows.values())
 
 
 def _heard(interface: QAccessibleInterface, within_seen: bool) -> Heard:

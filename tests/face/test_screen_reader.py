@@ -1,4 +1,4 @@
-"""A screen reader's walk through every window: names, order, the picture and its table, focus that is seen.
+"""A screen reader's walk through the window: names, order, the picture and its table, focus that is seen.
 
 Qt for Python offers no handler of accessibility events, so that what is sent when figures change cannot be caught. Qt
 sends "name changed" and "description changed" with every name and description that is set on a widget, and "data
@@ -7,31 +7,21 @@ changed" with every cell of a table: what is held here is that names, descriptio
 
 from __future__ import annotations
 
-from collections.abc import Callable, Iterator
+from collections.abc import Iterator
 from typing import TYPE_CHECKING
 
-import numpy as np
 import pytest
 from PySide6.QtCore import Qt
-from PySide6.QtGui import QAccessible, QGuiApplication, QImage
-from PySide6.QtWidgets import QApplication, QComboBox, QLineEdit, QWidget
-from pytestqt.qtbot import QtBot
+from PySide6.QtGui import QAccessible, QGuiApplication
+from PySide6.QtWidgets import QComboBox, QLineEdit, QWidget
 
-from fourcount.face.curve_window import open_curve
-from fourcount.face.handout_window import open_handout
-from fourcount.face.help_window import HelpWindow
 from fourcount.face.look import APPEARANCES
-from fourcount.face.patient_screen import open_screen
-from fourcount.face.window import MainWindow
 from fourcount.record.outcome import FORMS
-from fourcount.record.paper import Record
-from patient_outcomes import AT_TWELVE, HARM, WELCOME
-from screen_reader import Heard, Role, faults, reading_order, tab_order, tree
+from screen_reader import Role, faults, names, one_of, reading_order, rows_of_table, tab_order, tree
+from seen_focus import unseen_focus
 
 if TYPE_CHECKING:
     from conftest import Hands
-
-SEVERAL = Record(title_text="Night lights", outcomes=(AT_TWELVE, HARM, WELCOME))
 
 
 def open_all_rows(hands: Hands) -> None:
@@ -42,6 +32,46 @@ def open_all_rows(hands: Hands) -> None:
         if link.isVisible():
             link.click()
     hands.do("own-line")
+
+
+def show_all_measures(hands: Hands) -> None:
+    """Every measure, the working of one, and the relative figure as a picture."""
+    hands.do("more")
+    hands.row("risk_ratio").click()
+    hands.do("relative")
+
+
+def paste(hands: Hands) -> None:
+    """Paste a table, and leave what was understood on screen."""
+    QGuiApplication.clipboard().setText("38\t412\n70\t409")
+    hands.do("paste")
+
+
+def tell(hands: Hands) -> None:
+    """Have a notice and a banner on screen."""
+    hands.do("copy-text")
+    hands.window.tell_unexpected("ValueError", "/a/place")
+
+
+def run_across(hands: Hands) -> None:
+    """Turn the table over."""
+    hands.do("layout")
+
+
+def narrow(hands: Hands) -> None:
+    """Make the window as narrow as it goes."""
+    header = hands.window.header
+    hands.window.resize(hands.window.minimumSize())
+    hands.qtbot.waitUntil(lambda: header.height() >= header.minimumSizeHint().height())
+
+
+ARRANGED = {
+    "all measures": show_all_measures,
+    "paste": paste,
+    "told": tell,
+    "across": run_across,
+    "narrow": narrow,
+}
 
 
 def bring_about(hands: Hands, state: str) -> None:
@@ -62,20 +92,12 @@ def bring_about(hands: Hands, state: str) -> None:
     elif state == "wrong":
         hands.write(hands.window.printed.grid.cells["first_left_text"], "abc")
         hands.write(hands.window.patient.baseline, "120%")
-    elif state == "all measures":
-        hands.do("more")
-        hands.row("risk_ratio").click()
-        hands.do("relative")
-    elif state == "paste":
-        QGuiApplication.clipboard().setText("38\t412\n70\t409")
-        hands.do("paste")
-    elif state == "told":
-        hands.do("copy-text")
-        hands.window.tell_unexpected("ValueError", "/a/place")
+    elif state in ARRANGED:
+        ARRANGED[state](hands)
 
 
 TYPED = (*FORMS, "three", "rate", "overall", "case-control", "wrong")
-STATES = ("first start", "example", *TYPED, "all measures", "told", "paste")
+STATES = ("first start", "example", *TYPED, *ARRANGED)
 
 
 @pytest.mark.parametrize("state", STATES)
@@ -104,13 +126,6 @@ def test_what_is_told_is_heard(hands: Hands) -> None:
     assert faults(hands.window) == []
 
 
-def names(widgets: list[QWidget]) -> list[str]:
-    """What these are called, or what they say."""
-    return [
-        f"{type(widget).__name__} {widget.accessibleName() or getattr(widget, 'text', str)()}" for widget in widgets
-    ]
-
-
 def _in(column: QWidget, widget: QWidget) -> bool:
     return widget is column or column.isAncestorOf(widget)
 
@@ -124,12 +139,6 @@ def test_every_field_is_labelled(hands: Hands) -> None:
     assert [one for one in shown if not one.accessibleName()] == []
     tied = {one.label for one in tree(hands.window) if one.label}
     assert {"Study", "Outcome", "People who", "Time span", "Printed as", "Paper says", "Its source"} <= tied
-
-
-def one_of(found: list[Heard], kind: str) -> Heard:
-    """The one thing of a kind."""
-    (only,) = (one for one in found if one.kind == kind)
-    return only
 
 
 @pytest.mark.parametrize("arrangement", ["two", "one", "bars"])
@@ -147,20 +156,6 @@ def test_the_picture_is_one_object(hands: Hands, arrangement: str) -> None:
     assert "and 83 did not fall; of 100 with night lights 9 (9%) fell at least once and 91 did not fall" in picture.said
     assert picture.children == 0
     assert picture.focusable
-
-
-def rows_of_table(window: QWidget, kind: str) -> list[list[tuple[str, str, str]]]:
-    """Each row's cells: the head of its row, the head of its column, and what stands in it."""
-    (table,) = (widget for widget in window.findChildren(QWidget) if type(widget).__name__ == kind)
-    found = QAccessible.queryAccessibleInterface(table)
-    rows: dict[int, list[tuple[str, str, str]]] = {}
-    for place in range(found.childCount()):
-        child = found.child(place)
-        cell = child.tableCellInterface() if child.role() == Role.Cell else None
-        if cell is not None:
-            heads = (cell.rowHeaderCells()[0], cell.columnHeaderCells()[0], child)
-            rows.setdefault(cell.rowIndex(), []).append(tuple(one.text(QAccessible.Text.Name) for one in heads))
-    return list(rows.values())
 
 
 def test_the_same_numbers_are_a_table(hands: Hands) -> None:
@@ -237,33 +232,6 @@ def children(widget: QWidget) -> Iterator[object]:
     yield from (found.child(place) for place in range(found.childCount()))
 
 
-def shows_focus(widget: QWidget) -> bool:
-    """Whether a widget looks different with the focus, by more than a caret: columns of logical pixels that differ."""
-    widget.clearFocus()
-    without = widget.grab().toImage()
-    widget.setFocus(Qt.FocusReason.TabFocusReason)
-    assert QApplication.focusWidget() is widget
-    focused = widget.grab().toImage()
-    assert focused.size() == without.size()
-    return len(changed_columns(without, focused)) / focused.devicePixelRatio() >= 8
-
-
-def changed_columns(one: QImage, other: QImage) -> set[int]:
-    """Columns of pixels in which two pictures of one size differ."""
-    wide = one.width()
-    first, second = (np.frombuffer(_pixels(image), np.uint32).reshape(-1, wide) for image in (one, other))
-    return set(np.nonzero((first != second).any(axis=0))[0].tolist())
-
-
-def _pixels(image: QImage) -> bytes:
-    return bytes(image.convertToFormat(QImage.Format.Format_RGB32).constBits())
-
-
-def unseen_focus(stops: list[QWidget]) -> list[str]:
-    """Those of some widgets that look the same with the focus as without."""
-    return names([widget for widget in stops if not shows_focus(widget)])
-
-
 @pytest.mark.parametrize("appearance", APPEARANCES[1:])
 def test_the_focus_is_seen_wherever_it_is(hands: Hands, appearance: str) -> None:
     """Every stop of Tab, and every text that a click puts the focus on, shows where the focus is."""
@@ -274,64 +242,3 @@ def test_the_focus_is_seen_wherever_it_is(hands: Hands, appearance: str) -> None
     shown = [one for one in stops if one.isVisible() and one.isEnabled()]
     assert len(shown) > 60
     assert unseen_focus(shown) == []
-
-
-@pytest.fixture
-def several(open_window: Callable[..., MainWindow]) -> MainWindow:
-    """A window on a trial, a harm and a welcome outcome."""
-    return open_window(SEVERAL)
-
-
-def test_the_window_of_the_curve(hands: Hands) -> None:
-    """Drawing, sentence and table of the same numbers; every cell with the starting risk and the effect it is of."""
-    bring_about(hands, "three")
-    opened = open_curve(hands.window)
-    hands.qtbot.waitUntil(lambda: opened.drawn and opened.copy.isEnabled())
-    hands.click(opened.numbers)
-    assert faults(opened) == []
-    assert names(tab_order(opened)) == names(reading_order(opened))
-    drawing = one_of(tree(opened), "CurveCanvas")
-    assert "12%: 6.5%" in drawing.description
-    rows = rows_of_table(opened, "CurveTable")
-    (usual,) = (cells for cells in rows if cells[0][0].startswith("12%"))
-    assert usual[1] == (usual[0][2], "Risk ratio 0.54", "6.5% (4.5 to 9.3%)")
-    opened.activateWindow()
-    hands.qtbot.waitUntil(opened.isActiveWindow)
-    assert unseen_focus(reading_order(opened)) == []
-    opened.close()
-
-
-def test_the_patient_view(several: MainWindow, qtbot: QtBot) -> None:
-    """The page is one object with both groups' counts; under it, what can be done in reading order."""
-    opened = open_screen(several)
-    assert opened is not None
-    qtbot.waitUntil(opened.isActiveWindow)
-    assert faults(opened) == []
-    assert names(tab_order(opened)) == names(reading_order(opened))
-    page = one_of(tree(opened), "Canvas")
-    assert "12 in 100 (12%)" in page.description
-    assert "6 in 100 (6%)" in page.description
-    assert page.children == 0
-
-
-def test_the_window_of_the_handout(several: MainWindow, qtbot: QtBot) -> None:
-    """Each outcome is a box to tick, the page one object that says all that will be printed."""
-    opened = open_handout(several)
-    assert opened is not None
-    qtbot.waitUntil(opened.isActiveWindow)
-    assert faults(opened) == []
-    ticks = [one.name for one in tree(opened) if one.role == Role.CheckBox]
-    assert ticks == ["Falls", "Bleeding", "Healing"]
-    page = one_of(tree(opened), "Preview")
-    assert all(f"{name} in" in page.description for name in ticks)
-    assert unseen_focus(reading_order(opened)) == []
-    opened.close()
-
-
-def test_the_windows_of_help(hands: Hands) -> None:
-    """A page of help is one text with its title for a name, and a way to close it."""
-    hands.do("keys")
-    opened = hands.window.findChild(HelpWindow)
-    assert faults(opened) == []
-    assert one_of(tree(opened), "QTextEdit").name == opened.windowTitle()
-    opened.close()
