@@ -53,6 +53,8 @@ def test_what_was_typed_for_another_way_stays(example: Hands) -> None:
     take(example, "rate")
     example.write(patient.start.shown[0], "12 per 1,000 person-years")
     take(example, "overall")
+    share = next(field for field in example.window.patient.start.shown if field.field == "exposed_share_text")
+    assert share.accessibleName() == "Share of people with night lights"
     take(example, "one")
     assert patient.baseline.text() == "12%"
     take(example, "rate")

@@ -52,6 +52,8 @@ MARK_KEYS = (
     "risk-unlike-percent",
     "limits-need-sign",
     "risk-of-nobody",
+    "share-of-nobody",
+    "share-of-everybody",
     "risk-of-everybody",
     "low-above-high",
     "high-below-low",

@@ -120,7 +120,7 @@ class ForOnePatient(FieldsView):
         if not self._awake:
             self.baseline.show_text(outcome.patient.starting_risk_text)
             return
-        self.start.show_state(outcome.patient)
+        self.start.show_state(outcome)
         if findings is not None:
             self._show_findings(outcome, findings, record.choices)
 

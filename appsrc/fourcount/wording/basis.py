@@ -11,7 +11,7 @@ from fourcount.wording.caution_texts import EFFECT_RANGE
 AT_OWN_RISK = "At {own}"
 OWN_RANGE = "The interval is the study’s own."
 BOTH_RANGE = "The interval holds the imprecision of both the starting risk and the {effect}."
-OVERALL_RANGE = "The interval takes the overall risk and the share of people exposed as certain."
+OVERALL_RANGE = "The interval takes the overall risk and the share of people who have it as certain."
 CONSTANT_RANGE = "A difference kept constant has the same interval at every starting risk."
 USUAL = Choices(level=USUAL_LEVEL)
 

@@ -115,8 +115,8 @@ TERMS = (
     (
         "an overall risk, the share exposed",
         (
-            "A register often tells the risk of everybody, exposed or not. The risk of those who are not exposed is "
-            "worked out from it, from the share who are exposed, and from the effect."
+            "A register often tells the risk of everybody, with and without what the index group has. The risk without "
+            "it is worked out from that, from the share of people who have it, and from the effect."
         ),
     ),
     (
