@@ -54,7 +54,7 @@ def test_what_was_typed_for_another_way_stays(example: Hands) -> None:
     example.write(patient.start.shown[0], "12 per 1,000 person-years")
     take(example, "overall")
     share = next(field for field in example.window.patient.start.shown if field.field == "exposed_share_text")
-    assert share.accessibleName() == "Share of people with night lights"
+    assert share.accessibleName() == "Share of people in the index group"
     take(example, "one")
     assert patient.baseline.text() == "12%"
     take(example, "rate")

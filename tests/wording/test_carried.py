@@ -71,7 +71,7 @@ BASES = [
         of_total(design="cohort", patient=OVERALL),
         carried("risk_ratio", RR, 0.139, start_from="overall"),
         (
-            "Starting risk 13.9% (from an overall risk of 12%, 30% of people in the group “night lights”), "
+            "Starting risk 13.9% (from an overall risk of 12%, 30% of people in the group “Night lights”), "
             "risk ratio 0.54 (0.37 to 0.78) kept constant."
         ),
     ),

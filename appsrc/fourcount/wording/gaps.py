@@ -108,7 +108,7 @@ GAP_TEXTS = {
     "rate-not-typed": "Type a rate, such as 12 per 1,000 person-years.",
     "rate-unreadable": "The rate cannot be read; 12 per 1,000 person-years would do.",
     "rate-needs-span": "Type the study’s time span, such as 12 months: a rate gives a risk only over a time.",
-    "overall-not-typed": "Type the risk of all people together, and the share of them who have what the index group has.",
+    "overall-not-typed": "Type the risk of all people together, and the share of them who are like the index group.",
     "overall-unreadable": "The overall risk, or the share of people who have it, cannot be read; 12% and 30% would do.",
     "span-unreadable": "The other time span cannot be read; 5 years would do.",
     "other-span-needs-study-span": "Type the study’s own time span, such as 12 months: only from it can risks be "
