@@ -148,7 +148,7 @@ def test_what_an_icon_stands_for_is_said_as_it_is_drawn(outcome: Outcome, said: 
     """A hundred are figures, a thousand marks, whichever icons were chosen."""
     page = PatientPage(ready(outcome))
     style = page.style(1280, 740)
-    said_above = [run.text for runs, _ in page._above(style) for run in runs]
+    said_above = [run.text for runs, _ in page._above(style, 1200) for run in runs]
     assert said in said_above
 
 

@@ -9,7 +9,7 @@ from PySide6.QtGui import QColor, QPainter
 
 from fourcount.ink.paper_style import SCREEN_SIZES, PaperStyle
 from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
-from fourcount.ink.plain_picture import PlainPicture, Shown, beside_or_below
+from fourcount.ink.plain_picture import PlainPicture, Shown, beside_or_below, on_one_line
 from fourcount.wording import plain_texts
 
 DESIGNED_FOR = (1280, 690)
@@ -75,26 +75,28 @@ class PatientPage:
         painter.fillRect(QRectF(0, 0, width, height), QColor(style.palette.page))
         x, y, wide = style.px(MARGIN), float(style.px(20)), self._wide(style, width)
         room = max(height - self._text_height(style, wide), self._picture.least_height(style, wide))
-        for runs, gap in self._above(style):
+        for runs, gap in self._above(style, wide):
             y += draw_paragraph(painter, x, y, wide, runs) + gap
         y += self._picture.draw(painter, style, x, y, wide, room) + style.px(14)
         for runs, gap in self._below(style, wide):
             y += draw_paragraph(painter, x, y, wide, runs) + gap
 
     def _text_height(self, style: PaperStyle, wide: float) -> float:
-        paragraphs = (*self._above(style), *self._below(style, wide))
+        paragraphs = (*self._above(style, wide), *self._below(style, wide))
         return sum(paragraph_height(runs, wide) + gap for runs, gap in paragraphs) + style.px(20 + 14)
 
-    def _above(self, style: PaperStyle) -> list[Spaced]:
+    def _above(self, style: PaperStyle, wide: float) -> list[Spaced]:
         words, ink, muted, body = self._words, style.palette.ink, style.palette.muted, style.font("body")
         each = plain_texts.EACH_FIGURE if self._persons else plain_texts.EACH_MARK
-        turned = words.turned if self._drawn else ""
+        lead = [Run(each if self._drawn else "", body, muted), Run(words.lead, body, muted)]
+        turned = Run(words.turned if self._drawn else "", body, ink)
+        below = [lead] if not turned.text else [[*lead, turned]]
+        if turned.text and not on_one_line(below[0], wide):
+            below = [lead, [turned]]
         return [
             ([Run(words.title, style.font("estimate"), ink)], style.px(3)),
-            (
-                [Run(each if self._drawn else "", body, muted), Run(words.lead, body, muted), Run(turned, body, ink)],
-                style.px(14),
-            ),
+            *((runs, 0.0) for runs in below[:-1]),
+            (below[-1], style.px(14)),
         ]
 
     def _below(self, style: PaperStyle, wide: float) -> list[Spaced]:
