@@ -138,3 +138,16 @@ def test_the_studys_own_number_needed_stays_withheld_with_its_interval():
     """There the row of the study says why, and the patient's figures are the study's."""
     findings = found(of_total(icc_text="", cluster_size_text="21"))
     assert findings.patient.number_needed == findings.measures["number_needed"] == Gap("cluster-without-icc")
+
+
+def test_a_line_on_a_printed_effect_that_is_withheld_says_why():
+    """A survey has no hazard ratio to draw a margin on."""
+    line = {"line_kind": "margin", "line_scale": "hazard_ratio", "line_text": "1.2", "line_side": "more"}
+    assert appraise(effect_only(design="survey", **line), Choices()).line == Gap("design-no-rates")
+
+
+def test_a_risk_without_width_may_be_any_within_its_formula():
+    """1 of 10 v 0 of 10 by Wald: 8.6 fewer to 28.6 more per 100, of which the bare formula rules nothing out."""
+    findings = appraise(of_total((1, 10, 0, 10)), Choices(family="textbook"))
+    assert findings.patient.difference == findings.measures["risk_difference"]
+    assert isinstance(findings.patient.difference.interval, Interval)

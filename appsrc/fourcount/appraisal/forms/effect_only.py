@@ -29,7 +29,7 @@ from fourcount.appraisal.findings import (
     Recovered,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import for_the_reader, whole
+from fourcount.appraisal.forms.whole import for_the_reader, line_of, whole
 from fourcount.appraisal.gating import OBSERVATIONAL, SUPPORT, withheld_of_effects
 from fourcount.appraisal.postponing import Pace
 from fourcount.appraisal.turning import oriented_effect
@@ -55,7 +55,11 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     if isinstance(printed, Gap):
         return nothing_yet(printed, form="effect-only", measures=(outcome.paper_measure,), marks=marks)
     if isinstance(figure, Gap):
-        return nothing_yet(figure, form="effect-only", measures=(printed.measure,), marks=marks, given=printed)
+        line, line_marks = line_of(outcome, {printed.measure: figure}, None, level_of(printed))
+        marks += line_marks
+        return nothing_yet(
+            figure, form="effect-only", measures=(printed.measure,), marks=marks, given=printed, line=line
+        )
     figure, recovered = _with_interval(figure, printed)
     study = _study(printed, figure, outcome)
     p = recovered if isinstance(recovered, Gap) else recovered.p

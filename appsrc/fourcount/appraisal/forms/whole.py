@@ -48,7 +48,7 @@ def for_the_reader(
     ``counts`` is None, or a gap, where the intervals are not those of one unpaired table.
     """
     carried = for_a_patient(study, typed)
-    line, marks = _line(study.outcome, measures, None if isinstance(counts, Gap) else counts, level)
+    line, marks = line_of(study.outcome, measures, None if isinstance(counts, Gap) else counts, level)
     return ForTheReader(
         conversion=carried.conversion,
         patient=carried.patient,
@@ -58,7 +58,7 @@ def for_the_reader(
     )
 
 
-def _line(
+def line_of(
     outcome: Outcome, measures: Mapping[str, Measure], counts: FractionalCounts | None, level: float
 ) -> tuple[OwnLine | Gap | None, tuple[Mark, ...]]:
     """The reader's own line, as ``own_line`` tells it; most tables have none, and start without its tests."""
