@@ -12,6 +12,7 @@ from fourcount.appraisal.findings import (
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers, of_people
+from fourcount.wording.durations import duration
 from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.half_added import half_added
 from fourcount.wording.headline import people_for
@@ -23,6 +24,9 @@ CARRY_THE_ODDS = "the odds ratio can be carried instead"
 ODDS_AVOID_IT = "carrying the odds ratio avoids it"
 PAST_AN_END = ("beyond-one", "carried-beyond-zero")
 """Why no risk follows from an effect that is carried; odds never get there."""
+
+OF_WHAT = {"odds_ratio": " (not the odds)", "hazard_ratio": " (not the hazard)", "rate_ratio": " (not the rate)"}
+"""What another effect than a ratio of risks is about."""
 
 NEVER_PAST = ("odds_ratio", "hazard_ratio", "rate_ratio")
 """Effects that no starting risk takes past 100%."""
@@ -121,14 +125,21 @@ def _needed(needed: AnyNumberNeeded) -> str:
     return value if interval == NO_WIDTH_NEEDED else f"{value}{limits.bracketed(interval)}"
 
 
-def relative_words(patient: PatientFindings) -> str:
-    """The relative figure; none where nobody has the event either way, of whom no share can be more or fewer."""
-    nobody = patient.without.estimate == 0.0 and patient.with_.estimate == 0.0
-    return "" if nobody else relative(patient.risk_ratio)
+def relative_words(outcome: Outcome, patient: PatientFindings) -> str:
+    """The relative figure; none where nobody has the event either way, of whom no share can be more or fewer.
+
+    It is one of risks, which is said where what is kept constant is something else, or is kept over another time.
+    """
+    if patient.without.estimate == 0.0 and patient.with_.estimate == 0.0:
+        return ""
+    over = "" if patient.other_span is None else f" over {duration(patient.other_span)}"
+    kept = OF_WHAT.get(patient.effect, "")
+    subject = f" the {names.risk_name(outcome)}{over}{kept} is" if over or kept else ""
+    return relative(patient.risk_ratio, subject)
 
 
-def relative(ratio: Figure) -> str:
-    """``In relative words 46% lower (22% to 63%).``"""
+def relative(ratio: Figure, subject: str = "") -> str:
+    """``In relative words 46% lower (22% to 63%).``; ``subject`` says what is lower."""
     if isinstance(ratio.estimate, Gap):
         return ""
     change = ratio.estimate - 1
@@ -136,7 +147,7 @@ def relative(ratio: Figure) -> str:
         return ""
     word = limits.LOWER if change < 0 else limits.HIGHER
     interval = "" if half_added(ratio) else limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
-    return f"In relative words {numbers.percent_whole(abs(change))} {word}{interval}."
+    return f"In relative words{subject} {numbers.percent_whole(abs(change))} {word}{interval}."
 
 
 def odds_can_be_carried(findings: OutcomeFindings) -> bool:

@@ -127,7 +127,7 @@ def _detail(outcome: Outcome, patient: PatientFindings, findings: OutcomeFinding
     """What stands under the summary: number needed, relative words, and what the interval leaves out."""
     if isinstance(patient.with_.estimate, Gap):
         return carried.reason(patient.with_.estimate, patient, findings)
-    sentences = [carried.number_needed(patient.number_needed, outcome), carried.relative_words(patient)]
+    sentences = [carried.number_needed(patient.number_needed, outcome), carried.relative_words(outcome, patient)]
     sentences += carried.reasons(patient, findings)
     note = range_note(outcome, patient)
     sentences += [note] if note != OWN_RANGE else []

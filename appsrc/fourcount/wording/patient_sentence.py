@@ -30,7 +30,11 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
         return " ".join((f"{_without(outcome, patient, choices, people)}.", reason, *ranks))
     told = patient.number_needed == findings.measures.get("number_needed")  # a design without one has said so already
     needed = "" if told else carried.number_needed(patient.number_needed, outcome)
-    relative = "" if patient.effect == "risk_ratio" and patient.other_span is None else carried.relative_words(patient)
+    relative = (
+        ""
+        if patient.effect == "risk_ratio" and patient.other_span is None
+        else carried.relative_words(outcome, patient)
+    )
     note = range_note(outcome, patient)
     more = (*carried.reasons(patient, findings), "" if note == OWN_RANGE else note, *ranks)
     return " ".join(part for part in (_compared(outcome, patient, choices, people), needed, relative, *more) if part)
