@@ -10,11 +10,8 @@ import pytest
 from msgspec.structs import replace
 
 from fourcount.appraisal.findings import OutcomeFindings, PatientFindings
-from fourcount.record.outcome import CERTAINTIES, Outcome, Pairs, Patient, PersonTime
-from fourcount.wording import plain_texts
-from fourcount.wording.plain import negated, plain_hint, present
+from fourcount.record.outcome import CERTAINTIES, Outcome, Pairs, Patient
 from fourcount.wording.plain_outcome import PlainWords, plain_words
-from fourcount.wording.plain_refusal import why_not
 from fourcount.wording.plain_risks import plain_risks
 from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, LONG, SHOWN, SMALL, TRIAL, WELCOME, of_counts
 
@@ -38,64 +35,6 @@ def say(findings_of: FindingsOf) -> Callable[..., PlainWords]:
 
 
 @pytest.mark.parametrize(
-    ("typed", "said"),
-    [
-        ("fell at least once", "fall at least once"),
-        ("was readmitted", "are readmitted"),
-        ("Died within 30 days", "die within 30 days"),
-        ("did not fall or die", "do not fall or die"),
-        ("developed pneumonia, died or were readmitted", "develop pneumonia, die or are readmitted"),
-        ("had a stroke or heart attack", "have a stroke or heart attack"),
-        ("had no falls", "have no falls"),
-        ("had been admitted", "had been admitted"),
-        ("fell and limped", "fell and limped"),
-        ("転倒した", "転倒した"),
-        ("", ""),
-    ],
-)
-def test_the_past_is_said_in_the_present(typed: str, said: str) -> None:
-    """Known verbs are turned, in every part of a phrase; a phrase with an unknown one stays whole as typed."""
-    assert present(typed) == said
-
-
-@pytest.mark.parametrize(
-    "typed",
-    [
-        "lost to follow-up",
-        "left leg ulcer",
-        "left ventricular failure",
-        "used to smoke",
-        "missed miscarriage",
-        "fractured neck of femur",
-        "relapsed disease",
-        "healed ulcer",
-        "worsened pain",
-    ],
-)
-def test_what_only_looks_like_a_verb_stays_as_typed(typed: str) -> None:
-    """Words of the table that are no verb of these people in this phrase are left alone."""
-    assert present(typed) == typed
-
-
-@pytest.mark.parametrize(
-    ("typed", "said"),
-    [
-        ("lost weight", "lose weight"),
-        ("left the trial", "leave the trial"),
-        ("used a stick", "use a stick"),
-        ("missed an appointment", "miss an appointment"),
-        ("fractured a hip", "fracture a hip"),
-        ("relapsed within a year", "relapse within a year"),
-        ("healed completely", "heal completely"),
-        ("survived 5 years", "survive 5 years"),
-    ],
-)
-def test_the_same_words_as_verbs_are_turned(typed: str, said: str) -> None:
-    """Where what follows shows a verb it is put into the present."""
-    assert present(typed) == said
-
-
-@pytest.mark.parametrize(
     ("left", "right", "event", "other"),
     [
         ("fell", "", "fall", "do not"),
@@ -115,42 +54,12 @@ def test_a_heading_alone_is_said_as_a_verb(
     assert (words.event, words.other) == (event, other)
 
 
-@pytest.mark.parametrize(
-    ("said", "lack"),
-    [
-        ("fall at least once", "do not fall at least once"),
-        ("are readmitted", "are not readmitted"),
-        ("do not heal", "heal"),
-        ("have no falls", "have falls"),
-        ("die or are readmitted", ""),
-        ("転倒した", ""),
-    ],
-)
-def test_the_lack_is_said_only_where_it_is_plain(said: str, lack: str) -> None:
-    """A known verb is negated; a phrase of several parts or without a known verb is not."""
-    assert negated(said) == lack
-
-
 def test_words_typed_for_patients_go_first(say: Callable[..., PlainWords]) -> None:
     """What the reader typed for patients is said as it is, in each column's place."""
     words = say(replace(TRIAL, plain_event_text="trip over", plain_other_text="stay on their feet"))
     assert (words.event, words.other) == ("trip over", "stay on their feet")
     turned = replace(WELCOME, plain_event_text="get well", plain_other_text="stay ill")
     assert (say(turned).event, say(turned).other) == ("stay ill", "get well")
-
-
-def test_a_column_without_a_name_is_said_by_the_other_one() -> None:
-    """The hint of an unnamed column is the lack of the named one, in the fewest words beside it."""
-    bare = replace(TRIAL, right_words_text="", right_heading_text="", left_heading_text="")
-    assert plain_hint(bare, "right") == "do not"
-    assert plain_hint(bare, "left") == "fall at least once"
-
-
-def test_person_time_has_words_for_the_others_too() -> None:
-    """Its table has events alone; the others are said as typed, else as the lack of the event."""
-    rates = replace(TRIAL, table=PersonTime(unit_text="person-years"))
-    assert plain_hint(rates, "right") == "do not fall"
-    assert plain_hint(replace(rates, right_words_text="", right_heading_text=""), "right") == "do not"
 
 
 def test_the_page_says_first_both_risks_then_the_difference(say: Callable[..., PlainWords]) -> None:
@@ -317,46 +226,6 @@ def test_groups_are_headed_by_what_they_had_or_by_their_names(say: Callable[...,
     people = replace(CASE_CONTROL, first_label_text="people who took iron")
     assert say(people).with_.title == "People who took iron"
     assert say(people).summary.startswith("Among people who took iron, 6 fewer")
-
-
-@pytest.mark.parametrize("name", SHOWN)
-def test_every_kind_of_outcome_can_be_shown(name: str, findings_of: FindingsOf) -> None:
-    """Nothing is missing from a whole outcome, whatever its form."""
-    assert why_not(SHOWN[name], findings_of(SHOWN[name])) == ""
-
-
-@pytest.mark.parametrize(
-    ("changes", "item"),
-    [
-        ({"span_text": ""}, "the time span"),
-        ({"first_label_text": " "}, "the name of the index group"),
-        ({"second_label_text": ""}, "the name of the reference group"),
-        ({"left_words_text": "", "left_heading_text": ""}, "the event in words"),
-    ],
-)
-def test_what_is_missing_is_named(changes: dict[str, str], item: str, findings_of: FindingsOf) -> None:
-    """Without outcome, groups or time span nothing is shown, and the sentence names what to fill in."""
-    outcome = replace(TRIAL, **changes)
-    why = why_not(outcome, findings_of(outcome))
-    assert why == f"Before a patient is shown this, fill in {item}."
-
-
-def test_plain_words_stand_in_for_the_event(findings_of: FindingsOf) -> None:
-    """An event that is only named for patients is named."""
-    outcome = replace(TRIAL, left_words_text="", left_heading_text="", plain_event_text="fall")
-    assert why_not(outcome, findings_of(outcome)) == ""
-
-
-def test_a_welcome_outcome_needs_words_for_the_others(findings_of: FindingsOf) -> None:
-    """Where the drawn side has no words and none follow from the other's, they are asked for."""
-    outcome = replace(WELCOME, left_words_text="転倒した", right_words_text="")
-    assert plain_texts.OTHER_OUTCOME in why_not(outcome, findings_of(outcome))
-
-
-def test_a_case_control_study_without_a_starting_risk_is_refused(findings_of: FindingsOf) -> None:
-    """No risks, no page; the sentence asks for the starting risk."""
-    outcome = replace(CASE_CONTROL, patient=Patient())
-    assert "starting risk" in why_not(outcome, findings_of(outcome))
 
 
 BANNED = r"\b(NNT\w*|odds|ratio|intervals?|CI|p ?[<=]|significant\w*|hazard|95%|common|rare|likely|unlikely)\b"
