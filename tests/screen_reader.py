@@ -74,7 +74,8 @@ def walk(interface: QAccessibleInterface | None, within_seen: bool = True) -> It
 
 def everything(widget: QWidget) -> list[Heard]:
     """The walk through a window, once it is laid out and its parts are in order."""
-    QApplication.processEvents()
+    for _ in range(2):  # what is laid out may ask its neighbours to be laid out anew
+        QApplication.processEvents()
     if isinstance(widget, MainWindow):
         widget.reading.put_in_order()
     else:

@@ -60,9 +60,13 @@ def run_across(hands: Hands) -> None:
 
 def narrow(hands: Hands) -> None:
     """Make the window as narrow as it goes."""
-    header = hands.window.header
     hands.window.resize(hands.window.minimumSize())
-    hands.qtbot.waitUntil(lambda: header.height() >= header.minimumSizeHint().height())
+
+
+def enlarge(hands: Hands) -> None:
+    """Set all text at 200%."""
+    while hands.window.look.zoom < 2:
+        hands.do("bigger")
 
 
 ARRANGED = {
@@ -71,6 +75,7 @@ ARRANGED = {
     "told": tell,
     "across": run_across,
     "narrow": narrow,
+    "200%": enlarge,
 }
 
 
