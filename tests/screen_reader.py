@@ -14,7 +14,6 @@ from PySide6.QtCore import QRect, Qt
 from PySide6.QtGui import QAccessible, QAccessibleInterface
 from PySide6.QtWidgets import QApplication, QWidget
 
-from fourcount.face.reading import put_in_order
 from fourcount.face.window import MainWindow
 
 Role, Text = QAccessible.Role, QAccessible.Text
@@ -77,9 +76,7 @@ def everything(widget: QWidget) -> list[Heard]:
     for _ in range(2):  # what is laid out may ask its neighbours to be laid out anew
         QApplication.processEvents()
     if isinstance(widget, MainWindow):
-        widget.reading.put_in_order()
-    else:
-        put_in_order(widget)
+        widget.reading.put_in_order()  # at once, not at the next pause
     return list(walk(QAccessible.queryAccessibleInterface(widget)))
 
 

@@ -118,6 +118,15 @@ def test_the_window_is_heard_as_it_is_seen(hands: Hands, state: str) -> None:
     assert first == sorted(first)
 
 
+def test_the_order_follows_by_itself(hands: Hands) -> None:
+    """At a pause after parts were made they are told in the order in which they stand, though nobody asked for it."""
+    hands.do("example")
+    printed = hands.window.printed
+    study, outcome = printed._names["design"], printed._names["name_text"]
+    wanted = [study, printed.design, outcome, printed.name]
+    hands.qtbot.waitUntil(lambda: [part for part in printed.children() if part in wanted] == wanted)
+
+
 def test_what_is_told_is_heard(hands: Hands) -> None:
     """The banner and the short notice are in the tree while they are there, and only then."""
     bring_about(hands, "told")
