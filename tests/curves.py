@@ -25,6 +25,7 @@ class Notes:
         self.texts: list[tuple[float, float, float, str, float]] = []
         self.lines: list[tuple[tuple, ...]] = []
         self.widths: list[float] = []
+        self.strokes: list[list[tuple[float, float]]] = []
         self.areas: list[list[tuple[float, float, float]]] = []
         self.points: list[tuple[float, float, str]] = []
 
@@ -34,8 +35,8 @@ class Notes:
     def text(self, x, y, text, size, *_look, **_more) -> None:
         self.texts.append((x, y, self.width(text, size), text, size))
 
-    def stroke(self, *_all) -> None:
-        pass
+    def stroke(self, points, *_look) -> None:
+        self.strokes.append(points)
 
     def set_axes(self, box, across, up, *_look) -> None:
         self.box, self.across, self.up = box, across, up

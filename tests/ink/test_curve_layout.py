@@ -124,6 +124,16 @@ def test_a_page_grows_with_its_texts(outcome: Outcome) -> None:
     assert rooms[0] == pytest.approx(rooms[1])
 
 
+@pytest.mark.parametrize("zoom", [1.0, 1.5])
+def test_leaders_keep_below_the_words_of_the_axis(rising: Outcome, zoom: float) -> None:
+    """From a line that ends at 100% to its name, however long the words above the axis are."""
+    long = msgspec.structs.replace(rising, first_label_text="night lights in every room, " * 20)
+    for foot in ((), FOOT):
+        notes = laid(long, whole=True, sheet=Sheet(760 * zoom, 460 * zoom, zoom, foot=foot))
+        for points in notes.strokes:
+            assert max(y for _, y in points) <= notes.box[3] + 1
+
+
 def test_lines_are_told_without_colour(outcome: Outcome) -> None:
     """Each line has a dash of its own, and each has its name on the sheet."""
     drawn, view, words = parts(outcome)

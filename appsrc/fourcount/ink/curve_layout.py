@@ -219,7 +219,10 @@ class CurveLayout:
         heights = [tall * len(name.lines) + self.px(GAP / 2) for name in names]
         # Of lines that end at the top, the one that ends first has the highest name: its leader then crosses no line.
         wanted = [y + (box[2] - x) for x, y in places]
-        middles = curve_axes.apart(wanted, heights, *between)
+        floor, top = between
+        level = box[3] + heights[wanted.index(max(wanted))] / 2  # a leader from the top of the axes then stays there
+        ceiling = min(level, top) if sum(heights) <= min(level, top) - floor else top
+        middles = curve_axes.apart(wanted, heights, floor, ceiling)
         left = box[2] + self.px(2.5 * GAP)
         for name, (x, y), middle in zip(names, places, middles, strict=True):
             bend = (box[2] + self.px(GAP), middle)
