@@ -255,13 +255,16 @@ def test_names_show_up_wherever_they_belong(example: Hands) -> None:
     assert example.rows["risk_index"].startswith("Risk, night lights: ")
     assert grid.cells[CELLS[0]].accessibleName() == "Night lights, fell"
     assert "with usual care 17 (17%) fell at least once" in window.patient.figures.picture.accessibleDescription()
-    assert "Still to be named" not in window.patient.figures.detail.text()
+    assert "Still to be filled in" not in window.patient.figures.detail.text()
 
 
 def test_a_picture_of_nameless_groups_says_what_is_missing(example: Hands) -> None:
     """Four counts alone are drawn with stand-in names, and the column lists what is still to be named."""
     detail = example.window.patient.figures.detail.text()
-    assert "Still to be named: the event, the reference group, the index group, the time span." in detail
+    assert (
+        "Still to be filled in: what happens to them (“People who”), the name of the reference group, "
+        "the name of the index group, “Time span”."
+    ) in detail
 
 
 def test_title_and_source_are_the_papers_own(hands: Hands) -> None:

@@ -171,7 +171,7 @@ def test_one_sentence_says_what_everything_rests_on(outcome, patient, said):
 def test_what_the_interval_holds_is_said(outcome, patient, note):
     """Of both, of the effect alone, or with something taken as certain."""
     assert range_note(outcome, patient) == note
-    assert words_of(outcome, patient).detail.endswith(note)
+    assert note in words_of(outcome, patient).detail
     assert note in patient_sentence(outcome, findings_with(outcome, patient), Choices())
 
 

@@ -1,17 +1,20 @@
-"""What is kept constant for a patient, over which time, and what its relative figure is of. All figures are invented."""
+"""What is kept constant for a patient, over which time, and what its relative figure is of; all figures invented."""
 
 from __future__ import annotations
 
 import pytest
 
 from carried_patients import carried, effect, findings_with
-from forms import of_total
+from forms import of_total, paired
+from fourcount.appraisal.appraise import appraise
 from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
 from fourcount.wording.basis import basis
 from fourcount.wording.effects import carriable_words
-from fourcount.wording.patient import patient_words
+from fourcount.wording.patient import missing_fields, patient_words
+from fourcount.wording.patient_sentence import patient_sentence
+from fourcount.wording.sentence import headline
 
 RR, OR, HR = effect(0.54, 0.37, 0.78), effect(0.49, 0.32, 0.75), effect(0.72, 0.55, 0.92)
 YEAR, FIVE_YEARS = Duration(value=12, unit="month"), Duration(value=5, unit="year")
@@ -52,3 +55,52 @@ def test_an_effect_is_kept_over_the_studys_time_where_another_is_asked_for():
     assert carriable_words(outcome, other) == "hazard ratio 0.72, kept constant"
     assert "risk ratio 0.54 (0.37 to 0.78) kept constant over 12 months, carried to 5 years" in basis(outcome, rr)
     assert carriable_words(of_total(patient=typed()), one) == "risk ratio 0.54, kept constant"
+
+
+def test_an_interval_of_altered_counts_says_so_beside_the_patient():
+    """Nobody of 100 had the event: half was added for the interval alone, which then misses the estimate of 0."""
+    outcome = of_total(counts=(0, 100, 10, 100), patient=typed())
+    choices = Choices(family="textbook")
+    found = appraise(outcome, choices)
+    said = "The interval comes from counts with a half added, so it need not hold the estimate."
+    assert said in patient_words(outcome, found, choices, 100).detail
+    assert said in patient_sentence(outcome, found, choices)
+    assert "half" not in patient_words(outcome, appraise(outcome, Choices()), Choices(), 100).detail
+
+
+def test_the_studys_own_figures_by_an_adjusted_effect_are_told_from_its_crude_ones():
+    """Beside the sentence of the counts they look like another answer to the same question."""
+    adjusted = {"design": "cohort", "adjusted_text": "OR 0.60 (0.40 to 0.90)", "adjusted_for_text": "age"}
+    said = "These rest on the adjusted odds ratio, not on the table’s crude counts alone."
+    for start, told in ((Patient(), True), (typed(), False)):
+        outcome = of_total(patient=start, **adjusted)
+        assert (said in patient_words(outcome, appraise(outcome, Choices()), Choices(), 100).detail) == told
+
+
+def test_no_effect_has_no_cause():
+    """A number needed of infinity supposes nothing."""
+    outcome = of_total(counts=(10, 100, 10, 100), design="cohort", patient=typed())
+    detail = patient_words(outcome, appraise(outcome, Choices()), Choices(), 100).detail
+    assert "NNT at this starting risk ∞" in detail
+    assert "caused" not in detail
+
+
+def test_pairs_without_names_are_the_sides_of_their_table():
+    """People who are their own controls are neither an index group nor with or without anything."""
+    outcome = paired(first_label_text="", second_label_text="")
+    found = appraise(outcome, Choices())
+    words = patient_words(outcome, found, Choices(), 100)
+    assert (words.without_title, words.with_title) == ("Second side", "First side")
+    assert "group" not in f"{words.picture_sentence} {headline(outcome, found, Choices())}"
+    assert "on the second side" in headline(outcome, found, Choices())
+
+
+def test_a_matched_study_asks_for_its_own_names():
+    """What the cases have is their name, and what people were exposed to is what the table counts."""
+    nothing = {"left_words_text": "", "right_words_text": "", "left_heading_text": "", "right_heading_text": ""}
+    outcome = paired("matched", first_label_text="", second_label_text="", span_text="", **nothing)
+    assert missing_fields(outcome) == (
+        "the name of the cases, as what they have",
+        "what people were exposed to (“People who”)",
+        "“Time span”",
+    )

@@ -124,10 +124,15 @@ def test_without_a_starting_risk_a_case_control_study_says_what_it_needs(outcome
 
 
 def test_what_is_not_named_yet_is_listed(findings_of, outcome_of):
-    """Event, both groups and time, before any patient sees a picture."""
+    """Event, both groups and time, as their fields are called, before any patient sees a picture."""
     bare = Outcome(table=outcome_of().table)
     words = words_of(bare, findings_of)
-    assert words.missing == ("the event", "the reference group", "the index group", "the time span")
+    assert words.missing == (
+        "what happens to them (“People who”)",
+        "the name of the reference group",
+        "the name of the index group",
+        "“Time span”",
+    )
     assert words.without_title == "Without: reference group"
 
 

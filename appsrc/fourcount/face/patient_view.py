@@ -19,8 +19,8 @@ from fourcount.wording.form import lacking
 from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.names import effect_name, sentence_case
 from fourcount.wording.patient import WHICH_PEOPLE, patient_words
-from fourcount.wording.patient_labels import TABLE_CORNER, TABLE_ROW
-from fourcount.wording.patient_table import Row, patient_table, patient_table_head
+from fourcount.wording.patient_labels import TABLE_CORNER
+from fourcount.wording.patient_table import Row, patient_table, patient_table_head, rows_sentence
 from fourcount.wording.ranks import people_for_all
 
 
@@ -126,15 +126,8 @@ def _table(
     if isinstance(patient.with_.estimate, Gap) and len(rows) == 1:
         return {}  # its reason stands above
     heads = patient_table_head(outcome, findings, choices, people)
-    said = (
-        TABLE_ROW.format(
-            label=row.label,
-            figures=", ".join(f"{head}: {cell}" for head, cell in zip(heads[1:], row[1:], strict=True) if cell),
-        )
-        for row in rows
-    )
     corner = TABLE_CORNER.format(people=numbers.whole(people_for_all(patient, people)))
-    return {"rows": tuple(rows), "rows_head": heads, "rows_corner": corner, "rows_sentence": " ".join(said)}
+    return {"rows": tuple(rows), "rows_head": heads, "rows_corner": corner, "rows_sentence": rows_sentence(rows, heads)}
 
 
 def _own_risk(outcome: Outcome, findings: OutcomeFindings) -> bool:

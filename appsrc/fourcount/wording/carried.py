@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+from math import inf
+
 from fourcount.appraisal.findings import (
     AnyNumberNeeded,
     Figure,
@@ -112,7 +114,8 @@ def number_needed(needed: AnyNumberNeeded | Gap, outcome: Outcome) -> str:
     """The number needed of this column, told apart from that of the study."""
     if isinstance(needed, Gap):
         return gap_text(needed)
-    return f"{limits.needed_kind(needed)} at this starting risk {_needed(needed)}{names.if_caused(outcome)}."
+    caused = "" if needed.estimate == inf else names.if_caused(outcome)
+    return f"{limits.needed_kind(needed)} at this starting risk {_needed(needed)}{caused}."
 
 
 def needed_value(needed: AnyNumberNeeded) -> str:

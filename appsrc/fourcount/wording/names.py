@@ -27,6 +27,7 @@ STAND_INS = {"index": "index group", "reference": "reference group"}
 SIDES: dict[Design, dict[Position, str]] = {
     "matched": {"first": "cases", "second": "controls"},
     "before-after": {"first": "after", "second": "before"},
+    "paired": {"first": "first side", "second": "second side"},
 }
 """What the sides of pairs are by their design; the grid calls them so too."""
 
@@ -96,6 +97,8 @@ def in_group(outcome: Outcome, group: Group) -> str:
         return within if _is_time(within) else f"in the period “{label(outcome, group)}”"
     if _by_case(outcome) and within.lower() in SIDES["matched"].values():
         return f"among {within}"
+    if unnamed_side(outcome, group):
+        return f"on the {within}"
     if not labelled(outcome, group):
         return f"in the {STAND_INS[group]}"
     if within.lower().startswith(WHO):
@@ -103,6 +106,11 @@ def in_group(outcome: Outcome, group: Group) -> str:
     if outcome.design in WITH_DESIGNS:
         return f"with {within}"
     return f"in the group “{label(outcome, group)}”"
+
+
+def unnamed_side(outcome: Outcome, group: Group) -> bool:
+    """Whether this is a side of pairs that nobody has named, and that the design has no name for."""
+    return outcome.design == "paired" and isinstance(outcome.table, Pairs) and not labelled(outcome, group)
 
 
 def by_time(outcome: Outcome) -> bool:
@@ -122,7 +130,7 @@ def _by_case(outcome: Outcome) -> bool:
 def _stand_in(outcome: Outcome, group: Group) -> str:
     """An unnamed group: its side where the design tells it."""
     sides = SIDES.get(outcome.design)
-    if sides is None or (outcome.design == "matched" and not _by_case(outcome)):
+    if sides is None or (outcome.design != "before-after" and not isinstance(outcome.table, Pairs | EffectOnly)):
         return STAND_INS[group]
     return sides["first" if (group == "index") == (outcome.index_group == "first") else "second"]
 

@@ -119,7 +119,6 @@ OUTCOMES_FULL = "A paper holds 200 outcomes at most."
 TABLE_HEADS = {"without": "without", "with": "with", "difference": "difference", "needed": "NNT"}
 TABLE_NAME = "The picture’s numbers"
 TABLE_CORNER = "in {people}"
-TABLE_ROW = "{label}: {figures}."
 
 OWN_LINE = "A line of your own"
 OWN_LINE_CLOSE = "Close the line of your own"
