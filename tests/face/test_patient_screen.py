@@ -16,7 +16,7 @@ from fourcount.face.patient_screen import PatientScreen, open_screen
 from fourcount.face.window import MainWindow
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
-from patient_outcomes import AT_TWELVE, HARM, TRIAL, WELCOME
+from patient_outcomes import AT_TWELVE, HARM, SMALL, TRIAL, WELCOME
 
 UNNAMED = replace(TRIAL, span_text="", name_text="Sleep")
 SEVERAL = Record(title_text="Night lights", outcomes=(AT_TWELVE, HARM, UNNAMED, WELCOME))
@@ -138,7 +138,12 @@ def test_the_whole_page_is_told_to_a_screen_reader(opened: Opened) -> None:
     _, screen = opened()
     told = QAccessible.queryAccessibleInterface(screen.canvas)
     description = told.text(QAccessible.Text.Description)
-    for part in ("12 in 100", "6 fewer of these 100", "We cannot say which people.", "How sure the evidence is: not rated."):
+    for part in (
+        "12 in 100",
+        "6 fewer of these 100",
+        "We cannot say which people.",
+        "How sure the evidence is: not rated.",
+    ):
         assert part in description
     assert all(button.accessibleName() for button in screen.findChildren(QAbstractButton) if button.isVisible())
     press(screen, "Right")
@@ -225,3 +230,53 @@ def test_down_scrolls_a_page_that_is_taller(opened: Opened) -> None:
     QApplication.sendPostedEvents()
     press(screen, "Down")
     assert screen._scroll.verticalScrollBar().value() > 0
+
+
+def test_a_page_that_is_scrolled_to_is_drawn_inside_its_frame(opened: Opened, qtbot: QtBot) -> None:
+    """A page taller than the screen has a frame while it has the focus, and the page is seen in it."""
+    window, screen = opened(SMALL)
+    window.look.set_zoom(2.0)
+    screen.showNormal()
+    screen.resize(800, 700)
+    qtbot.waitUntil(screen.isActiveWindow)
+    screen.canvas.setFocus()
+    QApplication.sendPostedEvents()
+    assert screen.canvas.hasFocus()
+    assert screen.canvas.height() > screen._scroll.height()
+    image = screen.canvas.grab().toImage()
+    rows = [{image.pixelColor(x, y).name() for x in range(4, image.width() - 4, 3)} for y in range(4, 900, 9)]
+    assert any(len(shades) > 4 for shades in rows)
+    assert any(shades == {"#ffffff"} for shades in rows)
+
+
+def test_asked_for_twice_there_is_one(opened: Opened) -> None:
+    """The view that is open comes to the front, with the outcome that the window then shows."""
+    window, screen = opened()
+    window.session.look_at(1)
+    assert open_screen(window) is screen
+    assert title(screen) == "Bleeding in 12 months"
+    assert len(window.findChildren(PatientScreen)) == 1
+
+
+def test_one_that_was_left_is_not_found_again(opened: Opened) -> None:
+    """After Escape the next one is another."""
+    window, screen = opened()
+    press(screen, "Escape")
+    again = open_screen(window)
+    assert again is not None
+    assert again is not screen
+    assert again.isVisible()
+
+
+def test_arrows_turn_outcomes_from_every_link(opened: Opened, qtbot: QtBot) -> None:
+    """After Tab to the range or the way out, the arrows still lead to the next page and leave the focus where it is."""
+    _, screen = opened()
+    qtbot.waitUntil(screen.isActiveWindow)
+    screen.range.setFocus()
+    QTest.keyClick(screen.range, Qt.Key.Key_Right)
+    assert screen.place.text() == "2 of 3"
+    QTest.keyClick(screen.range, Qt.Key.Key_Left)
+    assert screen.place.text() == "1 of 3"
+    assert screen.range.hasFocus()
+    QTest.keyClick(screen.leave, Qt.Key.Key_Right)
+    assert screen.place.text() == "2 of 3"

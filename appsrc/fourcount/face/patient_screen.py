@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QEvent, QSize, Qt
-from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent, QPen, QResizeEvent
+from PySide6.QtCore import QEvent, QObject, QSize, Qt
+from PySide6.QtGui import QKeyEvent, QResizeEvent
 from PySide6.QtWidgets import QBoxLayout, QScrollArea, QVBoxLayout, QWidget
 
 from fourcount.appraisal.appraise import appraise
@@ -13,10 +13,9 @@ from fourcount.face.flow import FlowLayout
 from fourcount.face.header import Hairline
 from fourcount.face.links import Link
 from fourcount.face.on_white import OnWhite
+from fourcount.face.patient_canvas import Canvas, Scroll
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.face.text import Words
-from fourcount.ink.paper_style import PaperStyle
-from fourcount.ink.patient_page import MARGIN, PatientPage
 from fourcount.ink.plain_picture import Shown, shown
 from fourcount.wording import plain_texts
 from fourcount.wording.plain_refusal import why_not as why_no_screen
@@ -30,6 +29,7 @@ __all__ = ["PatientScreen", "open_screen", "why_no_screen"]
 
 FORWARD = (Qt.Key.Key_Right, Qt.Key.Key_PageDown, Qt.Key.Key_N)
 BACKWARD = (Qt.Key.Key_Left, Qt.Key.Key_PageUp, Qt.Key.Key_B)
+ARROWS = (Qt.Key.Key_Left, Qt.Key.Key_Right, Qt.Key.Key_Up, Qt.Key.Key_Down)
 FOOT_MARGIN = 45
 LINK_GAP = 18
 
@@ -43,75 +43,13 @@ def open_screen(window: MainWindow) -> PatientScreen | None:
         window.banner.tell(why)
         return None
     window.banner.hide()
-    screen = PatientScreen(window)
+    screen = next((one for one in window.findChildren(PatientScreen) if one.isVisible()), None) or PatientScreen(window)
+    screen.go_to(session.view)
     screen.showFullScreen()
+    screen.raise_()
     screen.activateWindow()
     screen.canvas.setFocus(Qt.FocusReason.OtherFocusReason)
     return screen
-
-
-class Canvas(QWidget):
-    """The page as one object: painted, and described in full sentences."""
-
-    def __init__(self, look: OnWhite) -> None:
-        super().__init__()
-        self._look = look
-        self._page: PatientPage | None = None
-        self._style: PaperStyle | None = None
-        self._room = QSize()
-        self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
-        look.changed.connect(self._fit)
-
-    def show_page(self, it: Shown) -> None:
-        """Show another outcome."""
-        self._page = PatientPage(it)
-        self.setAccessibleName(it.words.title)
-        self.setAccessibleDescription(it.words.sentence)
-        self._fit()
-
-    @property
-    def margin(self) -> int:
-        """How far the page's text stands from its edges."""
-        return self._style.px(MARGIN) if self._style else 0
-
-    def take_room(self, room: QSize) -> None:
-        """Fill the room that there is; what needs more can be scrolled to."""
-        if room != self._room:
-            self._room = room
-            self._fit()
-
-    def _fit(self) -> None:
-        if self._page is not None and not self._room.isEmpty():
-            self._style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
-            tall = max(float(self._room.height()), self._page.least_height(self._style, self._room.width()))
-            self.setFixedSize(self._room.width(), round(tall))
-        self.update()
-
-    def paintEvent(self, event: QPaintEvent) -> None:
-        if self._page is None or self._style is None:
-            return
-        painter = QPainter(self)
-        painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-        self._page.draw(painter, self._style, self.width(), self.height())
-        if self.hasFocus() and self.height() > self._room.height():
-            painter.setPen(QPen(self._look.colour("accent"), 2))
-            painter.drawRect(self.rect().adjusted(1, 1, -1, -1))
-        painter.end()
-
-    def focusInEvent(self, event: QFocusEvent) -> None:
-        super().focusInEvent(event)
-        self.update()
-
-    def focusOutEvent(self, event: QFocusEvent) -> None:
-        super().focusOutEvent(event)
-        self.update()
-
-
-class Scroll(QScrollArea):
-    """A scroll area that leaves every key to the screen: arrows to the side are outcomes here."""
-
-    def keyPressEvent(self, event: QKeyEvent) -> None:
-        event.ignore()
 
 
 class PatientScreen(QWidget):
@@ -174,6 +112,8 @@ class PatientScreen(QWidget):
             (self.range, self.leave),
         ):
             self.setTabOrder(before, after)
+        for link in (self.back, self.next, self.range, self.leave):
+            link.installEventFilter(self)
         self._on_look_changed()
 
     @property
@@ -220,6 +160,13 @@ class PatientScreen(QWidget):
             self._show()
 
     # Qt's own
+
+    def eventFilter(self, watched: QObject, event: QEvent) -> bool:
+        """Arrows turn pages whatever has the focus: buttons side by side would take them to move among themselves."""
+        if isinstance(event, QKeyEvent) and event.type() == QEvent.Type.KeyPress and event.key() in ARROWS:
+            self.keyPressEvent(event)
+            return True
+        return super().eventFilter(watched, event)
 
     def keyPressEvent(self, event: QKeyEvent) -> None:
         key, bar = event.key(), self._scroll.verticalScrollBar()
