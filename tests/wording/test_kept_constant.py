@@ -100,7 +100,22 @@ def test_a_matched_study_asks_for_its_own_names():
     nothing = {"left_words_text": "", "right_words_text": "", "left_heading_text": "", "right_heading_text": ""}
     outcome = paired("matched", first_label_text="", second_label_text="", span_text="", **nothing)
     assert missing_fields(outcome) == (
-        "the name of the cases, as what they have",
+        "the name of the cases, by what they have",
         "what people were exposed to (“People who”)",
         "“Time span”",
     )
+
+
+@pytest.mark.parametrize(("start", "offered"), [("70%", True), ("100%", False)])
+def test_odds_are_offered_where_they_would_help(start, offered):
+    """Of everybody no odds ratio makes more or fewer; the mark says so, and nothing beside it says otherwise."""
+    outcome = of_total(index_group="second", patient=Patient(starting_risk_text=start))
+    detail = patient_words(outcome, appraise(outcome, Choices()), Choices(), None).detail
+    assert detail.startswith("The risk would pass 100% here")
+    assert ("odds ratio" in detail) == offered
+
+
+def test_a_survey_was_done_at_a_time_and_over_none():
+    """Its time stands under a figure as it is typed."""
+    outcome = of_total(design="survey", span_text="2019", patient=typed())
+    assert patient_words(outcome, appraise(outcome, Choices()), Choices(), 100).summary == "2019, 95% interval 3 to 8"

@@ -161,7 +161,7 @@ class ForOnePatient(FieldsView):
         self.quiet.setVisible(not view.waits)
         self.quiet.show_state(outcome, self._fields.columnMinimumWidth(0))
         self.figures.show_view(view)
-        self.figures.setVisible(not view.waits)
+        self.figures.setVisible(not view.waits or view.to_odds)
 
     def _build(self) -> None:
         self._fields = QGridLayout()

@@ -66,8 +66,9 @@ def patient_view(
         return view._replace(waits=labels.PATIENT_WAITS if counted else labels.PATIENT_WAITS_OTHERWISE)
     patient = findings.patient
     if isinstance(patient, Gap):
-        told = any(field in view.marks for field in PATIENT_MARKS)
-        return view if told else view._replace(waits=gap_text(patient))
+        if any(mark.field in PATIENT_MARKS and not mark.used for mark in findings.marks):
+            return view  # the mark's sentence says why
+        return view._replace(waits=gap_text(patient), to_odds=patient.key in SOLVED_BY_ODDS)
     return _with_patient(view, outcome, findings, patient, choices, options)
 
 
@@ -81,6 +82,9 @@ PATIENT_MARKS = (
     "other_span_text",
 )
 """The column's fields that can be marked; the sentences stand under them."""
+
+SOLVED_BY_ODDS = ("solved-beyond-one-odds", "solved-beyond-zero-odds")
+"""Why an overall risk gives nobody's, where the odds ratio would do it."""
 
 
 def _with_patient(
@@ -115,7 +119,7 @@ def _with_patient(
 def _passes(patient: PatientFindings) -> bool:
     """Whether the carried effect asks for more than 100%, at any of the starting risks."""
     told = [one for one in (patient, patient.low, patient.high) if isinstance(one, PatientFindings)]
-    return any(one.with_.estimate == Gap("beyond-one") for one in told)
+    return any(one.with_.estimate == Gap("beyond-one") and one.baseline < 1.0 for one in told)
 
 
 def _table(

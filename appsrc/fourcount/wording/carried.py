@@ -188,5 +188,6 @@ def _of_the_effect(gap: Gap, patient: PatientFindings) -> Gap:
 
 def _offering(said: str, offer: str, gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
     """The reason, with the odds ratio offered where it would help and there is one."""
-    helps = patient.range_from != "table" and gap.key in PAST_AN_END and patient.effect not in NEVER_PAST
+    moves = 0.0 < patient.baseline < 1.0  # odds of nobody and of everybody stay
+    helps = moves and patient.range_from != "table" and gap.key in PAST_AN_END and patient.effect not in NEVER_PAST
     return f"{said.removesuffix('.')}; {offer}." if helps and odds_can_be_carried(findings) else said

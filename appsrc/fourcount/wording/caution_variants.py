@@ -7,6 +7,7 @@ from collections.abc import Callable, Mapping
 from fourcount.appraisal.findings import Caution, Fact
 from fourcount.wording.caution_texts import PLAIN_ESTIMATE, TEXTS, UNKNOWN
 from fourcount.wording.half_added import WALTER
+from fourcount.wording.labels import FIELDS, FORMS
 
 Facts = Mapping[str, Fact]
 
@@ -31,8 +32,8 @@ RESTS_WITHOUT_TOTALS = (
     "the {effect} being the same there."
 )
 ENTER_A_RATE_RATIO = (
-    "If controls were sampled as cases arose, the study’s ratio is a rate ratio and must not be converted: enter it as "
-    "a printed rate ratio then."
+    "If controls were sampled as cases arose, the study’s ratio is a rate ratio and must not be converted: choose "
+    f"“{FORMS['effect-only']}” under “{FIELDS['form']}” then, and type it as a rate ratio."
 )
 SEVERAL_ZEROS = "{count} of the four counts are 0: estimates or limits of 0 or infinity are shown as they are."
 

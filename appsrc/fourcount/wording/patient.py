@@ -27,7 +27,7 @@ FIELDS_OF = {
 }
 FIELDS_OF_CASES = {
     **dict.fromkeys(("the reference group", "the index group"), "what people were exposed to (“People who”)"),
-    "the event": "the name of the cases, as what they have",
+    "the event": "the name of the cases, by what they have",
     "the time span": "“Time span”",
 }
 """A patient of a matched case-control study becomes a case or not, exposed or not."""
