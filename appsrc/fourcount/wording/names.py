@@ -234,7 +234,7 @@ def within(span: str, outcome: Outcome) -> str:
 
 
 def over_span(outcome: Outcome) -> str:
-    """The time span under a figure: "over 12 months", or "" where none was typed; a survey's is the time it was done."""
+    """The time span under a figure: "over 12 months", or "" where none was typed; a survey's is when it was done."""
     return _common_span(outcome) if outcome.design == "survey" else over(_common_span(outcome))
 
 

@@ -53,8 +53,8 @@ TERMS = (
         "odds ratio, and as a risk ratio at 12%",
         (
             "Odds are people with the event for each person without it; the odds ratio compares the odds of two "
-            "groups. Of counts it lies farther from 1 than the risk ratio, the farther the more common the event. “As a "
-            "risk ratio at 12%” says what it comes to where 12 in 100 have the event without the index treatment or "
+            "groups. Of counts it lies farther from 1 than the risk ratio, the farther the more common the event. “As "
+            "a risk ratio at 12%” says what it comes to where 12 in 100 have the event without the index treatment or "
             "exposure."
         ),
     ),
