@@ -119,3 +119,13 @@ def test_a_survey_was_done_at_a_time_and_over_none():
     """Its time stands under a figure as it is typed."""
     outcome = of_total(design="survey", span_text="2019", patient=typed())
     assert patient_words(outcome, appraise(outcome, Choices()), Choices(), 100).summary == "2019, 95% interval 3 to 8"
+
+
+def test_where_everybody_has_it_the_risk_with_it_is_the_overall_one():
+    """It then has no interval, whatever effect is kept, and the sentence is that of an overall risk."""
+    start = {"start_kind": "overall", "overall_risk_text": "2%", "exposed_share_text": "100%"}
+    for effect_used in ("risk_ratio", "risk_difference"):
+        outcome = of_total(patient=Patient(effect=effect_used, **start))
+        words = patient_words(outcome, appraise(outcome, Choices()), Choices(), None)
+        assert words.with_interval == ""
+        assert "The interval takes the overall risk and the share of people who have it as certain." in words.detail

@@ -37,12 +37,12 @@ def range_note(outcome: Outcome, patient: PatientFindings) -> str:
         return ""
     if patient.range_from == "table":
         return OWN_RANGE
+    if patient.start_from == "overall":
+        return OVERALL_RANGE
     if patient.effect == "risk_difference" and patient.other_span is None:
         return CONSTANT_RANGE if isinstance(patient.difference.interval, Interval) else ""
     if patient.range_from == "both":
         return BOTH_RANGE.format(effect=effects.carried_name(outcome, patient))
-    if patient.start_from == "overall":
-        return OVERALL_RANGE
     return EFFECT_RANGE.format(baseline=starts.value(patient))
 
 

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from math import inf
+from math import inf, isclose
 
 from fourcount.appraisal.findings import (
     AnyNumberNeeded,
@@ -20,6 +20,7 @@ from fourcount.wording.half_added import half_added
 from fourcount.wording.headline import people_for
 
 NOT_GIVEN = "not given"
+ALIKE = 1e-12  # limits that only the last bits tell apart
 NO_WIDTH_NEEDED = f"{numbers.INFINITY}{numbers.TO}{numbers.INFINITY}"
 NO_CHANGE = "the same number"
 CARRY_THE_ODDS = "the odds ratio can be carried instead"
@@ -100,8 +101,10 @@ def risk_limits(figure: Figure, people: int) -> str:
 
 def no_width(figure: Figure) -> bool:
     """Whether both limits are one and the same, as at a starting risk of nobody: no interval worth the name."""
-    interval = figure.interval
-    return not isinstance(interval, Gap) and interval.low == interval.high
+    if isinstance(figure.interval, Gap):
+        return False
+    low, high = figure.interval.low, figure.interval.high
+    return low == high or (not isinstance(low, Gap) and not isinstance(high, Gap) and isclose(low, high, rel_tol=ALIKE))
 
 
 def _end(limit: float | Gap, people: int) -> str:
