@@ -14,7 +14,7 @@ from fourcount.ink.plain_picture import Shown, picture_words, shown
 from fourcount.picture.options import USUAL
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from patient_outcomes import AT_TWELVE, CASE_CONTROL, HAZARD, LONG, SHOWN, SMALL, TINY, TRIAL, WELCOME
+from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, LONG, SHOWN, SMALL, TINY, TRIAL, WELCOME, of_counts
 
 ROOMS = [(1280, 740), (1024, 640), (800, 560), (1920, 1020), (480, 360)]
 
@@ -130,6 +130,15 @@ def test_the_range_is_drawn_only_where_it_is_asked_for() -> None:
     assert ranged.plan.with_.uncertain == 12 - 7
 
 
+@pytest.mark.parametrize("ranged", [False, True])
+def test_the_key_has_no_number_that_the_range_would_change(ranged: bool) -> None:
+    """Fewer of the difference's figures are drawn where the range takes their place; those spared do not "fall"."""
+    for outcome, state, text in ((AT_TWELVE, "avoided", "spared, on balance"), (HARM, "added", "added, on balance")):
+        key = {entry.state: entry.text for entry in picture_words(ready(outcome, ranged)).key}
+        assert key[state] == text
+        assert key["uncertain"] == "not settled by the study"
+
+
 def test_one_array_says_what_it_shows_of_both_groups() -> None:
     """In one array, filled figures have it with both, and outlined ones with neither."""
     it = ready(AT_TWELVE)
@@ -157,6 +166,13 @@ def test_what_is_too_small_to_draw_speaks_of_whole_people() -> None:
     it = ready(TINY)
     assert it.plan.denominator is None
     assert it.words.without.number == "1 in 1,000,000"
+
+
+def test_only_a_difference_can_be_too_small_to_draw() -> None:
+    """50% against 50.00000001% are risks that could be drawn; the difference could not."""
+    it = ready(of_counts(TRIAL, (500_000_100, 499_999_900, 500_000_000, 500_000_000)))
+    assert picture_words(it).note.startswith("The difference is too small to draw as people.")
+    assert picture_words(ready(TINY)).note.startswith("The risks are too small to draw as people.")
 
 
 def test_a_paragraph_is_as_high_as_it_says() -> None:

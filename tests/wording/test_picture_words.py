@@ -162,7 +162,7 @@ def test_the_key_names_every_state(words_of: Callable[..., PictureWords]) -> Non
     assert [tuple(entry) for entry in words_of(Drawn(0.12, 0.06)).key] == [
         ("affected", "fell"),
         ("added", "falls added, on balance"),
-        ("uncertain", "left open by the interval"),
+        ("uncertain", "not settled by the study"),
         ("avoided", "falls avoided, on balance"),
         ("others", "did not fall"),
     ]

@@ -28,7 +28,7 @@ class Canvas(QWidget):
         """Show another outcome."""
         self._page = PatientPage(it)
         self.setAccessibleName(it.words.title)
-        self.setAccessibleDescription(it.words.sentence)
+        self.setAccessibleDescription(it.words.told(ranged=it.options.uncertainty))
         self._fit()
 
     @property

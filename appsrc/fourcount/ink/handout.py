@@ -179,7 +179,7 @@ def _words(
         record,
         [(outcome, patient) for outcome, patient in patients if not isinstance(patient, Gap)],
         [it.plan.denominator for it in ready],
-        [it.words.sentence for it in ready],
+        [it.words.told(ranged=it.options.uncertainty, printed=True) for it in ready],
         persons,
         version,
         today,

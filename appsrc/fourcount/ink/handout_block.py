@@ -122,6 +122,7 @@ class Block:
         rest = (words.which, words.certainty, words.relative, *words.other_starts)
         said = [
             *beside_or_below([Run(words.summary, total, palette.ink), Run(words.open_, total, palette.ink)], width),
+            [Run(words.rounded, body, palette.muted)],
             [Run(words.doubt, style.font("cell"), palette.ink)],
             [*(Run(text, body, palette.ink) for text in rest), Run(words.study, body, palette.muted)],
         ]

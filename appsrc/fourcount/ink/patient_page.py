@@ -105,6 +105,7 @@ class PatientPage:
         sentence = style.font("sentence")
         said = [
             *beside_or_below([Run(words.summary, sentence, ink), Run(words.open_, sentence, ink)], wide),
+            [Run(words.rounded, body, muted)],
             [Run(words.doubt, style.sized(DOUBT), ink)],
             [Run(words.which, body, ink), Run(words.certainty, body, ink), Run(words.study, body, muted)],
         ]
