@@ -12,6 +12,7 @@ from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
 from fourcount.wording.basis import basis
 from fourcount.wording.effects import carriable_words
+from fourcount.wording.lines import measure_lines
 from fourcount.wording.patient import missing_fields, patient_words
 from fourcount.wording.patient_sentence import patient_sentence
 from fourcount.wording.sentence import headline
@@ -51,7 +52,7 @@ def test_an_effect_is_kept_over_the_studys_time_where_another_is_asked_for():
     rr = carried("risk_ratio", RR, 0.12, study_span=YEAR, other_span=FIVE_YEARS)
     hr = carried("hazard_ratio", HR, 0.12, study_span=YEAR, other_span=FIVE_YEARS)
     (one,), (other,) = findings_with(outcome, rr).carriable, findings_with(outcome, hr).carriable
-    assert carriable_words(outcome, one) == "risk ratio 0.54, kept constant over 12 months"
+    assert carriable_words(outcome, one) == "risk ratio 0.54 over 12 months, kept constant"
     assert carriable_words(outcome, other) == "hazard ratio 0.72, kept constant"
     assert "risk ratio 0.54 (0.37 to 0.78) kept constant over 12 months, carried to 5 years" in basis(outcome, rr)
     assert carriable_words(of_total(patient=typed()), one) == "risk ratio 0.54, kept constant"
@@ -129,3 +130,12 @@ def test_where_everybody_has_it_the_risk_with_it_is_the_overall_one():
         words = patient_words(outcome, appraise(outcome, Choices()), Choices(), None)
         assert words.with_interval == ""
         assert "The interval takes the overall risk and the share of people who have it as certain." in words.detail
+
+
+def test_a_starting_risk_that_is_worked_out_has_no_digits_that_it_does_not_carry():
+    """An overall risk of 12% gives no risk to the second decimal, in column three or beside the odds ratio."""
+    outcome = of_total(patient=Patient(start_kind="overall", overall_risk_text="12%", exposed_share_text="31%"))
+    found = appraise(outcome, Choices())
+    note = next(line.note for line in measure_lines(outcome, found, Choices()) if line.key == "odds_ratio")
+    assert note.startswith("as a risk ratio at 14.0%: ")
+    assert patient_words(outcome, found, Choices(), 100).basis.startswith("Starting risk 14.0% (")

@@ -60,6 +60,7 @@ def test_relative_words_and_the_other_outcome_stand_under_the_risk_ratio(outcome
     [
         ("", ""),
         ("12%", "as a risk ratio at 12%: 0.52 (0.35 to 0.77)"),
+        ("12.25%", "as a risk ratio at 12.25%: 0.52 (0.35 to 0.77)"),
     ],
 )
 def test_the_odds_ratio_is_followed_by_its_risk_ratio(outcome_of, findings_of, starting_risk, note):

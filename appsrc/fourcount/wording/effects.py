@@ -10,7 +10,7 @@ from fourcount.wording import limits, names
 from fourcount.wording.durations import duration
 from fourcount.wording.lines.as_printed import carried_texts
 
-KEPT = "{name} {value}, kept constant{over}"
+KEPT = "{name} {value}{over}, kept constant"
 ANY_SPAN = ("hazard_ratio", "rate_ratio")
 """Effects that are the same over every time; the others are kept over the study's, and then carried to another one."""
 
