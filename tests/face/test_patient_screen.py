@@ -12,10 +12,11 @@ from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QAbstractButton, QApplication
 from pytestqt.qtbot import QtBot
 
+from fourcount.face import patient_screen
 from fourcount.face.patient_screen import PatientScreen, open_screen
 from fourcount.face.window import MainWindow
 from fourcount.record.outcome import Outcome
-from fourcount.record.paper import Record
+from fourcount.record.paper import Choices, Record
 from patient_outcomes import AT_TWELVE, HARM, SMALL, TRIAL, WELCOME
 
 UNNAMED = replace(TRIAL, span_text="", name_text="Sleep")
@@ -110,7 +111,7 @@ def test_it_is_refused_with_what_is_missing(open_window: Callable[..., MainWindo
     window = open_window(Record(outcomes=(UNNAMED,)))
     assert open_screen(window) is None
     assert window.banner.isVisible()
-    assert window.banner.words.text() == "Before a patient is shown this, fill in the time span."
+    assert window.banner.words.text() == "Before a patient is shown this, fill in “Time span”."
     window.session.edit_text("span_text", "12 months")
     assert open_screen(window) is not None
     assert not window.banner.isVisible()
@@ -280,3 +281,33 @@ def test_arrows_turn_outcomes_from_every_link(opened: Opened, qtbot: QtBot) -> N
     assert screen.range.hasFocus()
     QTest.keyClick(screen.leave, Qt.Key.Key_Right)
     assert screen.place.text() == "2 of 3"
+
+
+def test_it_keeps_its_outcome_while_others_move(opened: Opened) -> None:
+    """Moved, the outcome that the patient sees stays in view; edited too; removed, the window's own takes its place."""
+    window, screen = opened(*(replace(AT_TWELVE, name_text=name) for name in ("One", "Two", "Three", "Four")))
+    window.session.look_at(2)
+    open_screen(window)
+    assert title(screen) == "Three in 12 months"
+    window.outcomes.move_left()
+    assert (title(screen), screen.place.text()) == ("Three in 12 months", "2 of 4")
+    window.session.edit_text("name_text", "Third")
+    assert (title(screen), screen.place.text()) == ("Third in 12 months", "2 of 4")
+    window.outcomes.remove()
+    assert screen.place.text() == f"{window.session.view + 1} of 3"
+
+
+def test_a_keystroke_looks_at_what_changed_alone(opened: Opened, monkeypatch: pytest.MonkeyPatch) -> None:
+    """Of many outcomes one keystroke asks one whether it is ready, and what it says is on the page."""
+    window, screen = opened(*(replace(AT_TWELVE, name_text=f"Outcome {n}") for n in range(12)))
+    asked: list[str] = []
+    why_of = patient_screen.why_of
+
+    def counted(outcome: Outcome, choices: Choices) -> str:
+        asked.append(outcome.name_text)
+        return why_of(outcome, choices)
+
+    monkeypatch.setattr(patient_screen, "why_of", counted)
+    window.session.edit_text("name_text", "Falls")
+    assert asked == ["Falls"]
+    assert title(screen) == "Falls in 12 months"

@@ -116,8 +116,8 @@ def test_the_value_is_said_on_its_scale(measure: str, value: float, said: str) -
     """A difference per 100 with its side, a ratio as a ratio; the mark says whose it is."""
     line = a_line(measure=measure, value=value)
     assert value_text(line) == said
-    assert mark_words(line) == f"Flag: your line, {said}."
-    assert mark_words(msgspec.structs.replace(line, kind="margin")) == f"Flag: your margin, {said}."
+    assert mark_words(line) == f"The flag is your line, {said}."
+    assert mark_words(msgspec.structs.replace(line, kind="margin")) == f"The flag is your margin, {said}."
 
 
 def test_the_measure_and_the_level_are_named() -> None:

@@ -25,10 +25,10 @@ def test_every_kind_of_outcome_can_be_shown(name: str, findings_of: FindingsOf) 
 @pytest.mark.parametrize(
     ("changes", "item"),
     [
-        ({"span_text": ""}, "the time span"),
+        ({"span_text": ""}, "“Time span”"),
         ({"first_label_text": " "}, "the name of the index group"),
         ({"second_label_text": ""}, "the name of the reference group"),
-        ({"left_words_text": "", "left_heading_text": ""}, "the event in words"),
+        ({"left_words_text": "", "left_heading_text": ""}, "what happens to them (“People who”)"),
     ],
 )
 def test_what_is_missing_is_named(changes: dict[str, str], item: str, findings_of: FindingsOf) -> None:

@@ -230,8 +230,8 @@ TEXTS = {
     "solved-from-overall": (
         "A starting risk worked out",
         (
-            "The starting risk of {baseline} follows from an overall risk, a share of people exposed and the {effect}; "
-            "the first two are taken as certain."
+            "The starting risk of {baseline} follows from an overall risk, the share of people who have it and the "
+            "{effect}; the first two are taken as certain."
         ),
     ),
     "from-a-rate": (

@@ -21,7 +21,7 @@ MARGIN = {
     "across": "lies on both sides of your margin of {value}: it holds effects better and effects worse than the margin",
 }
 BY = {"margin-score": "Miettinen–Nurminen", "margin-printed": "from the interval"}
-MARK = "Flag: your {kind}, {value}."
+MARK = "The flag is your {kind}, {value}."
 ON_THE_BETTER_SIDE = " (itself better than no effect)"
 PARTED = " The interval rests on another method than the p, and here the two disagree."
 KINDS = {"matters": "line", "margin": "margin"}

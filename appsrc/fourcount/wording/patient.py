@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterable
 from dataclasses import dataclass
 
 from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
@@ -127,10 +128,10 @@ def missing(outcome: Outcome) -> tuple[str, ...]:
     return tuple(name for name, is_named in named.items() if not is_named)
 
 
-def missing_fields(outcome: Outcome) -> tuple[str, ...]:
-    """The fields in which that is typed, as the window calls them."""
+def missing_fields(outcome: Outcome, lacks: Iterable[str] | None = None) -> tuple[str, ...]:
+    """The fields in which that is typed, as the window calls them; ``lacks`` are those of it that are asked for."""
     fields = FIELDS_OF_CASES if subject(outcome) is not outcome else FIELDS_OF
-    return tuple(dict.fromkeys(fields[item] for item in missing(outcome)))
+    return tuple(dict.fromkeys(fields[item] for item in (missing(outcome) if lacks is None else lacks)))
 
 
 def _levelled(interval: str, choices: Choices) -> str:

@@ -5,13 +5,7 @@ from __future__ import annotations
 from fourcount.record.outcome import Certainty, Design
 
 MISSING = "Before a patient is shown this, fill in {items}."
-ITEMS = {
-    "the event": "the event in words",
-    "the reference group": "the name of the reference group",
-    "the index group": "the name of the index group",
-    "the time span": "the time span",
-}
-OTHER_OUTCOME = "words for the people who do not have the welcome outcome"
+OTHER_OUTCOME = "“Plain words” for the people who do not have the welcome outcome"
 
 DO_NOT = "do not"
 HOW_MANY = "How many people {event}"
@@ -44,6 +38,7 @@ OPEN = "The study leaves open that there is no difference."
 OPEN_EITHER_WAY = "The study leaves open a difference either way."
 OPEN_ONE_WAY = "The study leaves open that there is a difference."
 RANGE = "{index}, it could be from {low} to {high} in {people}{drawn}."
+NO_RANGE = "A range cannot be given here."
 RELATIVE = "Going from {before} to {after} in {people}{drawn} is also called “{percent} {word}”."
 RELATIVE_UNROUNDED = (
     "Going from {before} to {after} in {people}{drawn} is also called “{percent} {word}” "
