@@ -9,13 +9,13 @@ from pathlib import Path
 
 import pytest
 from msgspec.structs import replace
-from PySide6.QtCore import Qt
+from PySide6.QtCore import QSaveFile, Qt
 from PySide6.QtGui import QImage
 from PySide6.QtPrintSupport import QPrinter
 from PySide6.QtTest import QTest
 from pytestqt.qtbot import QtBot
 
-from fourcount.face import handout_command, handout_dialogs
+from fourcount.face import handout_command, handout_dialogs, page_file
 from fourcount.face.handout_window import HandoutWindow, open_handout
 from fourcount.face.window import MainWindow
 from fourcount.ink.handout import Handout, NoPage
@@ -77,7 +77,7 @@ def test_it_shows_the_outcomes_that_are_ready(opened: Opened) -> None:
     _, handout = opened()
     assert names_on(handout) == ["Falls", "Bleeding", "Healing"]
     assert [tick.isEnabled() for tick in handout._ticks] == [True, True, False, True]
-    assert handout.notes.text() == "Sleep: Before a patient is shown this, fill in the time span."
+    assert handout.notes.text() == "Sleep: Before a patient is shown this, fill in “Time span”."
     assert "6 fewer of these 100" in handout.preview.accessibleDescription()
 
 
@@ -112,11 +112,44 @@ def test_too_many_are_refused_until_enough_are_unticked(opened: Opened) -> None:
     assert handout.notice.text() == ""
 
 
+def test_what_is_ticked_and_no_longer_ready_says_what_it_lacks(opened: Opened, qtbot: QtBot) -> None:
+    """Where the last outcome of the page loses its time span, the time span is asked for and not another tick."""
+    window, handout = opened(Record(outcomes=(TRIAL,)))
+    window.session.edit_text("span_text", "")
+    qtbot.waitUntil(lambda: isinstance(handout.page, NoPage))
+    assert "fill in “Time span”" in handout.notice.text()
+    assert "Tick" not in handout.notice.text()
+
+
+def test_the_range_is_one_tick_away(opened: Opened) -> None:
+    """Off at first; ticked, every outcome's range is said on the page, and the record is as it was."""
+    window, handout = opened()
+    before, record = page(handout).words.description, window.session.record
+    assert not handout.range.isChecked()
+    assert "it could be from" not in before
+    QTest.mouseClick(handout.range, Qt.MouseButton.LeftButton)
+    assert page(handout).words.description.count("it could be from") == 3
+    assert window.session.record == record
+    QTest.mouseClick(handout.range, Qt.MouseButton.LeftButton)
+    assert page(handout).words.description == before
+
+
+@pytest.mark.parametrize("zooms", [(1.0, 2.0), (2.0, 1.0)], ids=str)
+def test_the_preview_follows_the_text_size(opened: Opened, zooms: tuple[float, float]) -> None:
+    """After another text size the page fills what the panel beside it leaves, and nothing of it is cut off."""
+    window, handout = opened()
+    handout.resize(980, 700)
+    for zoom in zooms:
+        window.look.set_zoom(zoom)
+        room = handout._scroll.width() - handout._scroll.verticalScrollBar().sizeHint().width()
+        assert handout.preview.width() == max(room, 160)
+
+
 def test_it_is_refused_where_no_outcome_is_ready(open_window: Callable[..., MainWindow]) -> None:
     """The window says what is missing from the outcome in view."""
     window = open_window(Record(outcomes=(UNNAMED, Outcome())))
     assert open_handout(window) is None
-    assert "fill in the time span" in window.banner.words.text()
+    assert "fill in “Time span”" in window.banner.words.text()
 
 
 def test_the_same_window_comes_to_the_front(opened: Opened) -> None:
@@ -194,6 +227,22 @@ def test_a_failed_save_leaves_the_old_file(
     assert (tmp_path / "page.pdf").is_dir()
 
 
+def test_a_full_disk_is_one_sentence(
+    opened: Opened, save_as: Callable[..., str], tmp_path: Path, monkeypatch: pytest.MonkeyPatch
+) -> None:
+    """A write that stops in its middle leaves what was there before and says what may be the matter."""
+
+    class Full(QSaveFile):
+        def write(self, data: bytes) -> int:
+            return len(data) // 2
+
+    _, handout = opened()
+    (tmp_path / "page.pdf").write_bytes(b"before")
+    monkeypatch.setattr(page_file, "QSaveFile", Full)
+    assert save_as(handout, tmp_path / "page.pdf").endswith(": the disk may be full.")
+    assert (tmp_path / "page.pdf").read_bytes() == b"before"
+
+
 def test_no_path_chosen_saves_nothing(opened: Opened, save_as: Callable[..., str]) -> None:
     """A dialog that was left changes nothing and says nothing."""
     _, handout = opened()
@@ -201,7 +250,7 @@ def test_no_path_chosen_saves_nothing(opened: Opened, save_as: Callable[..., str
 
 
 def test_it_goes_to_the_printer(opened: Opened, tmp_path: Path, monkeypatch: pytest.MonkeyPatch) -> None:
-    """The printer gets one sheet, titled after the study, whatever its own paper is."""
+    """The printer gets one sheet, titled after the study; a printer that writes a file has its name told."""
     _, handout = opened()
     path = tmp_path / "printed.pdf"
 
@@ -213,7 +262,7 @@ def test_it_goes_to_the_printer(opened: Opened, tmp_path: Path, monkeypatch: pyt
 
     monkeypatch.setattr(handout_dialogs, "ask_printer", choose)
     QTest.mouseClick(handout.print, Qt.MouseButton.LeftButton)
-    assert handout.notice.text() == "The page is on its way to the printer."
+    assert handout.notice.text() == "The page is saved as printed.pdf."
     data = path.read_bytes()
     assert data.startswith(b"%PDF")
     assert data.count(b"/MediaBox") == 1

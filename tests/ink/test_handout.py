@@ -18,6 +18,7 @@ from fourcount.ink.palette import PAPER
 from fourcount.ink.paper_style import PaperStyle
 from fourcount.ink.plain_picture import captions, on_one_line
 from fourcount.picture.common import common_denominator
+from fourcount.picture.options import USUAL
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, LONG, SHOWN, SMALL, TINY, TRIAL, WELCOME
@@ -295,3 +296,34 @@ def test_captions_of_both_groups_break_alike(width: int) -> None:
     if len(one) == 3:
         assert all(on_one_line(caption[1], width) for caption in (one, two))
         assert one[1][0].font == two[1][0].font
+
+
+def test_a_page_of_bars_says_nothing_of_marks() -> None:
+    """Where nothing is drawn as people nothing is said of what one of them is; beside people only of those."""
+    lead = made(TINY).words.lead
+    assert "person" not in lead
+    assert made(TRIAL, TINY).words.lead.startswith("Each figure is one person.")
+
+
+@pytest.mark.parametrize("count", range(1, 5))
+def test_the_range_is_on_the_page_where_it_is_asked_for(count: int) -> None:
+    """One to four outcomes with their ranges fit a page, drawn and said; without limits that is said."""
+    alone = replace(HAZARD, paper_text="0.72")
+    outcomes = (AT_TWELVE, HARM, alone, WELCOME)[:count]
+    named = [(outcome, appraise(outcome, Choices())) for outcome in outcomes]
+    page = compose(RECORD, named, PAPERS["a4"], "9.8.7", TODAY, USUAL._replace(uncertainty=True))
+    assert isinstance(page, Handout)
+    assert page.words.description.count("it could be from") == count - (count > 2)
+    notes = [block._aside._words.note for block in page._blocks]
+    assert all("it could be from" in note or note == "A range cannot be given here." for note in notes)
+
+
+def test_the_number_that_fits_makes_a_page() -> None:
+    """So many as the sentence says are a page, and one more are not, however many outcomes there are."""
+    outcomes = (AT_TWELVE, HARM, WELCOME, HAZARD) * 50
+    page = page_of(*outcomes)
+    assert isinstance(page, NoPage)
+    fits = int(page.sentence.split()[0])
+    assert page.sentence == f"{fits} of these 200 outcomes fit on one page: untick {200 - fits}."
+    assert isinstance(page_of(*outcomes[:fits]), Handout)
+    assert isinstance(page_of(*outcomes[: fits + 1]), NoPage)

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, NamedTuple
 
 from PySide6.QtCore import QEvent, QObject, QSize, Qt
 from PySide6.QtGui import QKeyEvent, QResizeEvent
@@ -23,7 +23,8 @@ from fourcount.wording.plain_refusal import why_not as why_no_screen
 if TYPE_CHECKING:
     from fourcount.face.window import MainWindow
     from fourcount.picture.options import PictureOptions
-    from fourcount.record.paper import Record
+    from fourcount.record.outcome import Outcome
+    from fourcount.record.paper import Choices, Record
 
 __all__ = ["PatientScreen", "open_screen", "why_no_screen"]
 
@@ -38,7 +39,7 @@ def open_screen(window: MainWindow) -> PatientScreen | None:
     """Show the outcome in view to the patient; a sentence in the window, and None, where something is missing."""
     session = window.session
     session.settle()
-    why = why_no_screen(session.outcome, appraise(session.outcome, session.record.choices))
+    why = why_of(session.outcome, session.record.choices)
     if why:
         window.banner.tell(why)
         return None
@@ -50,6 +51,19 @@ def open_screen(window: MainWindow) -> PatientScreen | None:
     screen.activateWindow()
     screen.canvas.setFocus(Qt.FocusReason.OtherFocusReason)
     return screen
+
+
+class Ready(NamedTuple):
+    """Whether an outcome has all that a page needs; held with what that was found of, so that ids stay theirs."""
+
+    outcome: Outcome
+    choices: Choices
+    is_so: bool
+
+
+def why_of(outcome: Outcome, choices: Choices) -> str:
+    """Why an outcome of a record cannot be shown; "" where it can."""
+    return why_no_screen(outcome, appraise(outcome, choices))
 
 
 class PatientScreen(QWidget):
@@ -64,6 +78,8 @@ class PatientScreen(QWidget):
         self._range = False
         self._place = 0
         self._pages: list[int] = []
+        self._ready: dict[tuple[int, int], Ready] = {}
+        self._outcome: Outcome | None = None
         self.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose)
         self.setWindowTitle(plain_texts.SCREEN_TITLE)
         self.setAutoFillBackground(True)
@@ -82,6 +98,7 @@ class PatientScreen(QWidget):
         self.leave.clicked.connect(self.close)
         self._look.changed.connect(self._on_look_changed)
         self._session.changed.connect(self._on_changed)
+        self._count = len(self._session.record.outcomes)
         self._take_pages()
         self.go_to(self._session.view)
 
@@ -127,8 +144,16 @@ class PatientScreen(QWidget):
         self._show()
 
     def _take_pages(self) -> None:
-        """The outcomes that have all they need: a patient is led past the others."""
-        self._pages = [place for place in range(len(self._session.record.outcomes)) if self._shown(place)]
+        """The outcomes that have all they need: a patient is led past the others. Only changed ones are looked at."""
+        record, known = self._session.record, self._ready
+        self._ready = {}
+        for outcome in record.outcomes:
+            key = (id(outcome), id(record.choices))
+            before = known.get(key)
+            self._ready[key] = before or Ready(outcome, record.choices, not why_of(outcome, record.choices))
+        self._pages = [
+            place for place, outcome in enumerate(record.outcomes) if self._ready[id(outcome), id(record.choices)].is_so
+        ]
 
     def _shown(self, place: int) -> Shown | None:
         record: Record = self._session.record
@@ -140,6 +165,7 @@ class PatientScreen(QWidget):
         it = self._shown(self.outcome)
         if it is None:
             return
+        self._outcome = self._session.record.outcomes[self.outcome]
         self.canvas.show_page(it)
         self._scroll.verticalScrollBar().setValue(0)
         number, count = self._place + 1, len(self._pages)
@@ -227,12 +253,24 @@ class PatientScreen(QWidget):
 
     def _on_changed(self) -> None:
         """Follow the record; where nothing of it can be shown any more, there is nothing to see."""
-        at = self.outcome if self._pages else 0
+        at = self._followed()
         self._take_pages()
         if self._pages:
             self.go_to(at)
         else:
             self.close()
+
+    def _followed(self) -> int:
+        """Where the outcome shown stands now: moved along; where it is gone, the window's is shown."""
+        outcomes, count = self._session.record.outcomes, self._count
+        self._count = len(outcomes)
+        at = self.outcome if self._pages else 0
+        if at < len(outcomes) and outcomes[at] is self._outcome:
+            return at
+        moved = next((place for place, outcome in enumerate(outcomes) if outcome is self._outcome), None)
+        if moved is not None:
+            return moved
+        return at if count == self._count else self._session.view
 
     def _on_look_changed(self) -> None:
         px = self._look.px

@@ -227,5 +227,5 @@ def _note(it: Shown) -> str:
     elif it.plan.denominator != 100:
         parts.append(plain_texts.EACH_PICTURE.format(people=numbers.whole(it.plan.denominator)))
     if it.options.uncertainty:
-        parts.append(it.words.range_)
+        parts.append(it.words.range_ or plain_texts.NO_RANGE)
     return " ".join(part for part in parts if part)
