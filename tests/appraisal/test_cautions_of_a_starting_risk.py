@@ -97,6 +97,7 @@ def test_baseline_uncertain_not_without_a_range(facts):
     """Where no range is given nothing is said of it."""
     assert "baseline-uncertain" not in facts(5, 0, 8, 0, baseline="12%", family="textbook")
     assert "baseline-uncertain" not in facts(80, 20, 20, 80, baseline="50%")  # four times 50% is no risk
+    assert "baseline-uncertain" not in facts(*TABLE, baseline="0%")  # nobody stays nobody
 
 
 @pytest.mark.parametrize("design", ["trial", "cohort", "survey", "case-control"])

@@ -73,8 +73,9 @@ def baseline_uncertain(case: Case) -> Facts | None:
     carried = case.carried
     if carried is None or carried.range_from != "effect" or carried.start_from == "overall":
         return None
-    if isinstance(carried.difference.estimate, Gap) or isinstance(carried.difference.interval, Gap):
-        return None
+    interval = carried.difference.interval
+    if isinstance(carried.difference.estimate, Gap) or isinstance(interval, Gap) or interval.low == interval.high:
+        return None  # at a risk that no effect moves there is no range
     # A difference kept constant has the same limits at every starting risk.
     if carried.effect == "risk_difference" and carried.other_span is None:
         return None
