@@ -19,6 +19,7 @@ from fourcount.appraisal.measures import number_needed_from
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.stats.conversion import risk_with
+from fourcount.stats.normal import quantile
 from fourcount.stats.propagation import StartLimits, limits_of_counts, propagated
 
 BARE = Gap("bare-starting-risk")
@@ -74,7 +75,8 @@ def with_counts(kind: CarriedEffect, figure: Figure, events: int, total: int) ->
     both = propagated(kind, figure.estimate, figure.interval, 0.95, start)
     assert not isinstance(both, Gap)
     bare = carried(kind, figure, events / total)
-    without = Interval(low=both.without.low, high=both.without.high)
+    z = quantile(0.95)
+    without = Interval(low=start.at(-z), high=start.at(z))
     return msgspec.structs.replace(
         bare,
         without=Figure(estimate=events / total, interval=without, method="wilson"),

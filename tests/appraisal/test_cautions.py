@@ -21,8 +21,8 @@ def test_the_keys_in_order():
         "strata-unlike", "strata-small", "no-meta-analysis", "odds-ratio-differs", "effect-kept-constant",
         "effect-kept-elsewhere", "difference-kept-constant", "baseline-far", "constant-rates", "other-span",
         "solved-from-overall", "from-a-rate", "baseline-uncertain", "rests-on-baseline",
-        "totals-are-sampled", "controls-over-time", "observational", "adjusted-effect", "crude-beside-adjusted",
-        "crude-carried", "within-pairs", "adjusted-opposite", "adjusted-turned", "carried-level", "converted-limits",
+        "controls-over-time", "totals-are-sampled", "observational", "adjusted-effect", "crude-beside-adjusted",
+        "within-pairs", "adjusted-opposite", "adjusted-turned", "carried-level",
         "adjusted-converted", "zero-cells", "half-added", "through-no-effect", "family-parts", "rare-harm", "leans",
     ]  # fmt: skip
 
@@ -83,19 +83,6 @@ def test_odds_ratio_differs_not_in_a_case_control_study(facts):
 def test_observational_designs(facts, design):
     """Without randomisation the crude effect may be confounded."""
     assert [{"design": design}] == facts(*TABLE, design=design)["observational"]
-
-
-def test_converted_limits_with_a_typed_risk(facts):
-    """The odds ratio is carried, and its limits are converted at a risk that is taken as certain."""
-    assert facts(*TABLE, baseline="12%", effect="odds_ratio")["converted-limits"] == [{"baseline": 0.12}]
-    assert facts(*TABLE, baseline="12%", design="case-control")["converted-limits"] == [{"baseline": 0.12}]
-    assert "converted-limits" not in facts(*TABLE, baseline="12%")
-    assert "converted-limits" not in facts(*TABLE, effect="odds_ratio")
-
-
-def test_converted_limits_not_without_limits(facts):
-    """An odds ratio without an interval has no limits to convert."""
-    assert "converted-limits" not in facts(0, 0, 8, 5, baseline="12%", effect="odds_ratio")
 
 
 @pytest.mark.parametrize(

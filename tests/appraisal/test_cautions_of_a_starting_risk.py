@@ -39,6 +39,31 @@ def test_effect_kept_constant_not_at_what_is_printed_as_the_same_risk(facts, ref
     assert told == ("effect-kept-constant" in facts(40, 960, *reference, baseline=baseline, effect="odds_ratio"))
 
 
+@pytest.mark.parametrize("effect", ["risk_ratio", "odds_ratio"])
+@pytest.mark.parametrize(("baseline", "kept"), [("0%", False), ("100%", False), ("1%", True)])
+def test_effect_kept_constant_not_where_no_ratio_moves_anybody(facts, effect, baseline, kept):
+    """Nobody stays nobody, and everybody stays so or would pass 100%."""
+    table = (70, 339, 38, 374)
+    assert kept == ("effect-kept-constant" in facts(*table, baseline=baseline, effect=effect))
+    assert "effect-kept-constant" not in facts(*table, baseline="60%")
+
+
+@pytest.mark.parametrize(
+    ("cells", "baseline", "other"),
+    [
+        # 1 - 0.88 (374/412)/(339/409) = 3.6%, and 0.12 (38/412)/(70/409) = 6.5%
+        (TABLE, "12%", pytest.approx(1 - 0.88 * (374 / 412) / (339 / 409))),
+        (TABLE, "2%", "less than 0%"),
+        ((38, 374, 20, 389), "5%", None),
+    ],
+)
+def test_the_other_risk_ratio_is_told_where_people_would_see_it(facts, cells, baseline, other):
+    """Keeping the risk ratio of not having the event gives another risk; of 5% both make 9 in 100."""
+    (found,) = facts(*cells, baseline=baseline)["effect-kept-constant"]
+    assert found.get("other") == other
+    assert "other" not in facts(*cells, baseline=baseline, effect="odds_ratio")["effect-kept-constant"][0]
+
+
 @pytest.mark.parametrize(
     ("baseline", "far"), [("5%", False), ("4.9%", True), ("20%", False), ("20.1%", True), ("10%", False)]
 )
@@ -72,20 +97,23 @@ def test_baseline_uncertain_not_without_a_range(facts):
     """Where no range is given nothing is said of it."""
     assert "baseline-uncertain" not in facts(5, 0, 8, 0, baseline="12%", family="textbook")
     assert "baseline-uncertain" not in facts(80, 20, 20, 80, baseline="50%")  # four times 50% is no risk
+    assert "baseline-uncertain" not in facts(*TABLE, baseline="0%")  # nobody stays nobody
 
 
 @pytest.mark.parametrize("design", ["trial", "cohort", "survey", "case-control"])
 @pytest.mark.parametrize("baseline", ["", "12%"])
 def test_totals_are_sampled_in_a_case_control_study_only(facts, design, baseline):
-    """There the totals are those of cases and controls, whatever is typed beside them."""
-    assert (design == "case-control") == ("totals-are-sampled" in facts(*TABLE, design=design, baseline=baseline))
+    """There the totals are those of cases and controls; with a starting risk, what all rests on says so."""
+    found = facts(*TABLE, design=design, baseline=baseline)
+    told = "totals-are-sampled" in found, any("totals" in one for one in found.get("rests-on-baseline", ()))
+    assert told == (design == "case-control" and not baseline, design == "case-control" and bool(baseline))
 
 
 def test_a_case_control_study_with_a_starting_risk_rests_on_it(facts):
     """Every absolute figure rests on the typed risk, and the controls' sampling decides what the ratio is."""
     found = facts(*TABLE, design="case-control", baseline="12%")
-    assert found["rests-on-baseline"] == [{"baseline": 0.12, "effect": "odds_ratio"}]
-    assert found["controls-over-time"] == [{}]
+    assert found["rests-on-baseline"] == [{"baseline": 0.12, "effect": "odds_ratio", "totals": "sampled"}]
+    assert found["controls-over-time"] == [{"design": "case-control"}]
 
 
 @pytest.mark.parametrize("rest", [{"design": "case-control"}, {"design": "cohort", "baseline": "12%"}])

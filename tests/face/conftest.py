@@ -156,8 +156,11 @@ class Hands:
 
 @pytest.fixture(scope="session")
 def qapp() -> QApplication:
-    """The application that a start of the program makes."""
-    return make_application(["fourcount"])
+    """The application that a start of the program makes; what is loaded by now is left out of every collection."""
+    application = make_application(["fourcount"])
+    gc.collect()
+    gc.freeze()
+    return application
 
 
 @pytest.fixture
@@ -171,10 +174,14 @@ def open_window(qtbot: QtBot, folder: Path, monkeypatch: pytest.MonkeyPatch) -> 
     """Open a window and wait until it has painted; it is closed at the end without a question."""
     monkeypatch.setattr(keeping_dialogs, "ask_losing", lambda parent, name: "discard")
     workers: list[Later] = []
+    windows: list[MainWindow] = []  # a window that nobody holds is collected, and all that it owns with it
 
     def make(record: Record | None = None) -> MainWindow:
+        gc.collect()  # a dead window that is collected while the next one is made takes its slots along
+        gc.disable()
         workers.append(Later())
         window = make_window(folder, record, workers[-1])
+        windows.append(window)
         qtbot.addWidget(window)
         with qtbot.waitSignal(window.first_painted):
             window.show()

@@ -1,19 +1,18 @@
-"""The curve's window: it follows the record, is drawn elsewhere, says everything in words, and leaves as a file."""
+"""The curve's window: it follows the record, is drawn elsewhere, and says everything in words."""
 
 from __future__ import annotations
 
 import threading
 from collections.abc import Iterator
-from pathlib import Path
 from typing import TYPE_CHECKING
 
 import pytest
 from PySide6.QtCore import Qt
-from PySide6.QtGui import QGuiApplication, QImage
 from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QTableWidget, QWidget
 
-from fourcount.face import curve_file, curve_window
+from curve_hands import ODDS, choose, curve_shown, drawn
+from fourcount.face import curve_window
 from fourcount.face.curve_window import CurveWindow, open_curve
 from fourcount.face.later import Later
 from fourcount.ink.curve import draw_curve
@@ -23,30 +22,12 @@ from fourcount.wording.curve import NOTHING
 if TYPE_CHECKING:
     from conftest import Hands
 
-ODDS = "Odds ratio as a risk ratio"
-
-
-def drawn(hands: Hands, shown: CurveWindow) -> QImage:
-    """The drawing of the record as it stands, once it is there."""
-    hands.qtbot.waitUntil(lambda: shown.drawn and not shown._pause.isActive() and shown.copy.isEnabled())
-    return shown.canvas.image
-
 
 @pytest.fixture
 def shown(example: Hands) -> Iterator[CurveWindow]:
     """The curve of the worked example's counts."""
-    example.do("curve")
-    opened = example.window.findChild(CurveWindow)
-    assert opened is not None
-    drawn(example, opened)
-    yield opened
-    for left in example.window.findChildren(CurveWindow):
-        left.close()
-
-
-def choose(hands: Hands, shown: CurveWindow, text: str) -> None:
-    hands.choose(shown.view, text)
-    drawn(hands, shown)
+    with curve_shown(example) as opened:
+        yield opened
 
 
 def test_the_command_opens_it_once(example: Hands, shown: CurveWindow) -> None:
@@ -159,6 +140,42 @@ def test_the_same_numbers_are_a_table(example: Hands, shown: CurveWindow) -> Non
     assert shown.table.isHidden()
 
 
+@pytest.mark.parametrize("zoom", [1.0, 1.5, 2.0])
+def test_heads_of_the_table_are_seen_whole(example: Hands, shown: CurveWindow, zoom: float) -> None:
+    """However many lines a head takes in its column, at every text size; no row is cut either."""
+    example.window.look.set_zoom(zoom)
+    example.click(shown.numbers)
+    table, head = shown.table, shown.table.horizontalHeader()
+
+    def room(column: int) -> int:
+        text = table.horizontalHeaderItem(column).text()
+        return head.fontMetrics().boundingRect(
+            0, 0, table.columnWidth(column) - 8, 0, Qt.TextFlag.TextWordWrap.value, text
+        ).height()  # fmt: skip
+
+    example.qtbot.waitUntil(lambda: head.font() == example.window.look.font("body"))
+    example.qtbot.waitUntil(lambda: all(head.height() >= room(column) for column in range(table.columnCount())))
+    assert any(room(column) > head.fontMetrics().height() for column in range(table.columnCount()))
+    example.qtbot.waitUntil(lambda: table.height() >= head.height() + table.verticalHeader().length())
+
+
+@pytest.mark.parametrize("view", [0, 1, 2, 3])
+@pytest.mark.parametrize(("zoom", "size"), [(1.0, (360, 300)), (2.0, (700, 600)), (2.0, (480, 400))])
+def test_words_of_any_length_are_no_error_in_a_small_window(
+    example: Hands, shown: CurveWindow, zoom: float, size: tuple[int, int], view: int
+) -> None:
+    """Whatever is typed, the drawing is made and the description has all of it."""
+    span = "within two years and a day " * 74
+    for field in ("span_text", "name_text", "left_words_text", "first_label_text", "second_label_text"):
+        example.window.session.edit_text(field, span)
+    example.window.look.set_zoom(zoom)
+    shown.resize(*size)
+    choose(example, shown, shown.view.itemText(view))
+    assert shown.canvas.accessibleDescription().count(span.strip()) >= 1
+    example.click(shown.copy)
+    assert shown.notice.text() == labels.COPIED
+
+
 def test_a_screen_reader_hears_all_of_it(shown: CurveWindow) -> None:
     """The drawing is one object with a name and a description; every control has a name."""
     assert shown.canvas.accessibleName() == "Across starting risks: had the event"
@@ -177,71 +194,6 @@ def test_tab_walks_every_control(example: Hands, shown: CurveWindow) -> None:
         QTest.keyClick(example.focus, Qt.Key.Key_Tab)
     stops = [shown.view, shown.whole, shown.numbers, shown.canvas, shown.save, shown.copy]
     assert [widget for widget in walked if widget in stops] == stops
-
-
-@pytest.mark.parametrize(("name", "begins"), [("a.png", b"\x89PNG"), ("a.svg", b"<?xml"), ("a.pdf", b"%PDF")])
-def test_it_is_saved_with_its_cautions(
-    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch, tmp_path: Path, name: str, begins: bytes
-) -> None:
-    """The suffix decides the kind; the file is named in a sentence."""
-    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / name))
-    example.click(shown.save)
-    assert shown.notice.text() == labels.SAVED.format(name=name)
-    data = (tmp_path / name).read_bytes()
-    assert data.startswith(begins)
-    if name == "a.svg":
-        assert b"Does not recommend" in data
-
-
-def test_a_folder_that_cannot_be_written_is_a_sentence(
-    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch, tmp_path: Path
-) -> None:
-    """Nothing is written, nothing lost, and the next try works."""
-    (tmp_path / "a file").write_text("mine", encoding="utf-8")
-    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / "a file" / "curve.png"))
-    example.click(shown.save)
-    assert shown.notice.text().startswith("The curve could not be saved in ")
-    assert (tmp_path / "a file").read_text(encoding="utf-8") == "mine"
-    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / "curve.png"))
-    example.click(shown.save)
-    assert (tmp_path / "curve.png").exists()
-
-
-def test_another_kind_of_file_is_a_sentence(
-    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch, tmp_path: Path
-) -> None:
-    """A name that ends in none of the three kinds writes nothing."""
-    monkeypatch.setattr(curve_file, "ask_path", lambda parent: str(tmp_path / "curve.xls"))
-    example.click(shown.save)
-    assert "curve.xls ends in none of these" in shown.notice.text()
-    assert list(tmp_path.glob("curve*")) == []
-
-
-def test_a_save_that_is_called_off_says_nothing(
-    example: Hands, shown: CurveWindow, monkeypatch: pytest.MonkeyPatch
-) -> None:
-    """Nothing chosen, nothing done."""
-    monkeypatch.setattr(curve_file, "ask_path", lambda parent: "")
-    example.click(shown.save)
-    assert shown.notice.text() == ""
-
-
-def test_it_is_copied_as_a_picture(example: Hands, shown: CurveWindow) -> None:
-    """On white, whatever the window looks like, with twice the pixels."""
-    example.window.look.set_appearance("dark")
-    drawn(example, shown)
-    example.click(shown.copy)
-    image = QGuiApplication.clipboard().image()
-    assert image.width() == 2 * curve_file.WIDTH
-    assert image.pixelColor(2, 2).name() == "#ffffff"
-    assert shown.notice.text() == labels.COPIED
-
-
-def test_what_is_told_ends_with_the_next_change(example: Hands, shown: CurveWindow) -> None:
-    """A notice about a copy says nothing of a changed record."""
-    example.click(shown.copy)
-    example.window.session.edit_text("first_left_text", "40")
-    assert shown.notice.text() == ""
 
 
 def test_it_is_drawn_anew_in_the_dark_and_at_larger_text(example: Hands, shown: CurveWindow) -> None:
@@ -289,14 +241,3 @@ def test_a_worker_that_is_closed_answers_nothing(example: Hands) -> None:
     worker.ask("key", lambda: begun.append("drawn") or b"")
     assert later.finish(5.0)
     assert begun == []
-
-
-def test_a_name_without_a_suffix_gets_that_of_its_kind(shown: CurveWindow, monkeypatch: pytest.MonkeyPatch) -> None:
-    """The kind that was chosen in the question decides, a typed suffix goes first."""
-    ask = "fourcount.face.curve_file.QFileDialog.getSaveFileName"
-    monkeypatch.setattr(ask, lambda *rest: ("/x/curve", labels.FILTERS[".pdf"]))
-    assert curve_file.ask_path(shown) == "/x/curve.pdf"
-    monkeypatch.setattr(ask, lambda *rest: ("/x/curve.svg", labels.FILTERS[".pdf"]))
-    assert curve_file.ask_path(shown) == "/x/curve.svg"
-    monkeypatch.setattr(ask, lambda *rest: ("", ""))
-    assert curve_file.ask_path(shown) == ""

@@ -1,25 +1,21 @@
-"""The window and the command of the handout: ticks, preview, files, printer, and sentences for what fails."""
+"""The window of the handout: ticks, preview, files, printer, and sentences for what fails."""
 
 from __future__ import annotations
 
-import subprocess
-import sys
 from collections.abc import Callable, Iterator
 from pathlib import Path
 
 import pytest
 from msgspec.structs import replace
-from PySide6.QtCore import Qt
-from PySide6.QtGui import QImage
+from PySide6.QtCore import QSaveFile, Qt
 from PySide6.QtPrintSupport import QPrinter
 from PySide6.QtTest import QTest
 from pytestqt.qtbot import QtBot
 
-from fourcount.face import handout_command, handout_dialogs
+from fourcount.face import handout_dialogs, page_file
 from fourcount.face.handout_window import HandoutWindow, open_handout
 from fourcount.face.window import MainWindow
 from fourcount.ink.handout import Handout, NoPage
-from fourcount.record.codec import encode
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
 from patient_outcomes import AT_TWELVE, HARM, HAZARD, TRIAL, WELCOME
@@ -77,7 +73,7 @@ def test_it_shows_the_outcomes_that_are_ready(opened: Opened) -> None:
     _, handout = opened()
     assert names_on(handout) == ["Falls", "Bleeding", "Healing"]
     assert [tick.isEnabled() for tick in handout._ticks] == [True, True, False, True]
-    assert handout.notes.text() == "Sleep: Before a patient is shown this, fill in the time span."
+    assert handout.notes.text() == "Sleep: Before a patient is shown this, fill in “Time span”."
     assert "6 fewer of these 100" in handout.preview.accessibleDescription()
 
 
@@ -112,11 +108,44 @@ def test_too_many_are_refused_until_enough_are_unticked(opened: Opened) -> None:
     assert handout.notice.text() == ""
 
 
+def test_what_is_ticked_and_no_longer_ready_says_what_it_lacks(opened: Opened, qtbot: QtBot) -> None:
+    """Where the last outcome of the page loses its time span, the time span is asked for and not another tick."""
+    window, handout = opened(Record(outcomes=(TRIAL,)))
+    window.session.edit_text("span_text", "")
+    qtbot.waitUntil(lambda: isinstance(handout.page, NoPage))
+    assert "fill in “Time span”" in handout.notice.text()
+    assert "Tick" not in handout.notice.text()
+
+
+def test_the_range_is_one_tick_away(opened: Opened) -> None:
+    """Off at first; ticked, every outcome's range is said on the page, and the record is as it was."""
+    window, handout = opened()
+    before, record = page(handout).words.description, window.session.record
+    assert not handout.range.isChecked()
+    assert "it could be from" not in before
+    QTest.mouseClick(handout.range, Qt.MouseButton.LeftButton)
+    assert page(handout).words.description.count("it could be from") == 3
+    assert window.session.record == record
+    QTest.mouseClick(handout.range, Qt.MouseButton.LeftButton)
+    assert page(handout).words.description == before
+
+
+@pytest.mark.parametrize("zooms", [(1.0, 2.0), (2.0, 1.0)], ids=str)
+def test_the_preview_follows_the_text_size(opened: Opened, zooms: tuple[float, float]) -> None:
+    """After another text size the page fills what the panel beside it leaves, and nothing of it is cut off."""
+    window, handout = opened()
+    handout.resize(980, 700)
+    for zoom in zooms:
+        window.look.set_zoom(zoom)
+        room = handout._scroll.width() - handout._scroll.verticalScrollBar().sizeHint().width()
+        assert handout.preview.width() == max(room, 160)
+
+
 def test_it_is_refused_where_no_outcome_is_ready(open_window: Callable[..., MainWindow]) -> None:
     """The window says what is missing from the outcome in view."""
     window = open_window(Record(outcomes=(UNNAMED, Outcome())))
     assert open_handout(window) is None
-    assert "fill in the time span" in window.banner.words.text()
+    assert "fill in “Time span”" in window.banner.words.text()
 
 
 def test_the_same_window_comes_to_the_front(opened: Opened) -> None:
@@ -194,6 +223,22 @@ def test_a_failed_save_leaves_the_old_file(
     assert (tmp_path / "page.pdf").is_dir()
 
 
+def test_a_full_disk_is_one_sentence(
+    opened: Opened, save_as: Callable[..., str], tmp_path: Path, monkeypatch: pytest.MonkeyPatch
+) -> None:
+    """A write that stops in its middle leaves what was there before and says what may be the matter."""
+
+    class Full(QSaveFile):
+        def write(self, data: bytes) -> int:
+            return len(data) // 2
+
+    _, handout = opened()
+    (tmp_path / "page.pdf").write_bytes(b"before")
+    monkeypatch.setattr(page_file, "QSaveFile", Full)
+    assert save_as(handout, tmp_path / "page.pdf").endswith(": the disk may be full.")
+    assert (tmp_path / "page.pdf").read_bytes() == b"before"
+
+
 def test_no_path_chosen_saves_nothing(opened: Opened, save_as: Callable[..., str]) -> None:
     """A dialog that was left changes nothing and says nothing."""
     _, handout = opened()
@@ -201,7 +246,7 @@ def test_no_path_chosen_saves_nothing(opened: Opened, save_as: Callable[..., str
 
 
 def test_it_goes_to_the_printer(opened: Opened, tmp_path: Path, monkeypatch: pytest.MonkeyPatch) -> None:
-    """The printer gets one sheet, titled after the study, whatever its own paper is."""
+    """The printer gets one sheet, titled after the study; a printer that writes a file has its name told."""
     _, handout = opened()
     path = tmp_path / "printed.pdf"
 
@@ -213,7 +258,7 @@ def test_it_goes_to_the_printer(opened: Opened, tmp_path: Path, monkeypatch: pyt
 
     monkeypatch.setattr(handout_dialogs, "ask_printer", choose)
     QTest.mouseClick(handout.print, Qt.MouseButton.LeftButton)
-    assert handout.notice.text() == "The page is on its way to the printer."
+    assert handout.notice.text() == "The page is saved as printed.pdf."
     data = path.read_bytes()
     assert data.startswith(b"%PDF")
     assert data.count(b"/MediaBox") == 1
@@ -254,80 +299,3 @@ def test_ticks_are_large_and_seen(opened: Opened, zoom: float, appearance: str) 
     image = tick.grab().toImage()
     shades = {image.pixelColor(x, y).name() for x in range(image.width() // 2) for y in range(image.height())}
     assert window.look.colour("accent").name() in shades
-
-
-@pytest.fixture
-def record_file(tmp_path: Path) -> Path:
-    """A record of two outcomes in a file."""
-    path = tmp_path / "paper.fourcount"
-    path.write_bytes(encode(Record(title_text="Night lights", outcomes=(AT_TWELVE, HARM))))
-    return path
-
-
-def run(*words: str | Path) -> int:
-    """The command in this process, which has its application already."""
-    return handout_command.run([str(word) for word in words])
-
-
-@pytest.mark.parametrize("paper", ["a4", "letter"])
-def test_the_command_writes_the_page(record_file: Path, tmp_path: Path, paper: str) -> None:
-    """Status 0, and a picture in the shape of the paper."""
-    out = tmp_path / "page.png"
-    assert run(record_file, "-o", out, "--paper", paper) == 0
-    image = QImage(str(out))
-    shape = {"a4": 297 / 210, "letter": 279.4 / 215.9}[paper]
-    assert image.height() / image.width() == pytest.approx(shape, abs=0.01)
-
-
-@pytest.mark.parametrize(
-    ("words", "said"),
-    [
-        ((), "A file is needed"),
-        (("FILE",), "Say where the page goes with -o"),
-        (("FILE", "-o"), "-o needs a value"),
-        (("FILE", "-o", "x.doc"), "The page can be saved as .pdf, .png or .svg"),
-        (("FILE", "-o", "x.pdf", "--paper", "a3"), "The paper must be a4 or letter"),
-        (("FILE", "--fast", "-o", "x.pdf"), "There is no option"),
-        (("FILE", "FILE", "-o", "x.pdf"), "One file at a time"),
-        (("nothing.fourcount", "-o", "x.pdf"), "no such file"),
-    ],
-)
-def test_bad_input_is_one_sentence_and_status_2(
-    record_file: Path, words: tuple[str, ...], said: str, capsys: pytest.CaptureFixture[str]
-) -> None:
-    """Whatever is typed wrongly is answered on stderr in one line, without a traceback."""
-    assert run(*(record_file if word == "FILE" else word for word in words)) == 2
-    told = capsys.readouterr()
-    assert said in told.err
-    assert told.err.startswith("fourcount: ")
-    assert told.err.count("\n") == 1
-    assert told.out == ""
-
-
-def test_an_unfinished_outcome_is_named(tmp_path: Path, capsys: pytest.CaptureFixture[str]) -> None:
-    """A ticked outcome that is not ready stops the page; left off it, the rest is made."""
-    path, out = tmp_path / "paper.fourcount", tmp_path / "page.svg"
-    path.write_bytes(encode(Record(outcomes=(TRIAL, UNNAMED))))
-    assert run(path, "-o", out) == 2
-    assert "“Sleep” cannot be on the page yet" in capsys.readouterr().err
-    path.write_bytes(encode(Record(outcomes=(TRIAL, replace(UNNAMED, on_handout=False)))))
-    assert run(path, "-o", out) == 0
-
-
-def test_a_folder_that_cannot_be_written_is_status_1(
-    record_file: Path, tmp_path: Path, capsys: pytest.CaptureFixture[str]
-) -> None:
-    """What went wrong outside is status 1 and one sentence."""
-    assert run(record_file, "-o", tmp_path / "nowhere" / "page.pdf") == 1
-    assert "could not be saved" in capsys.readouterr().err
-
-
-def test_the_command_needs_no_display(record_file: Path, tmp_path: Path) -> None:
-    """A fresh process without any display writes a PDF and says nothing."""
-    out = tmp_path / "page.pdf"
-    code = "import sys; from fourcount.face.handout_command import run; sys.exit(run(sys.argv[1:]))"
-    done = subprocess.run(
-        [sys.executable, "-c", code, str(record_file), "-o", str(out)], capture_output=True, text=True, check=False
-    )
-    assert (done.returncode, done.stdout, done.stderr) == (0, "", "")
-    assert out.read_bytes().startswith(b"%PDF")

@@ -8,7 +8,7 @@ import pytest
 from PySide6.QtWidgets import QWidget
 
 from fourcount.face.cell import CountCell
-from fourcount.face.fields import ChoiceField
+from fourcount.face.choice_field import ChoiceField
 from fourcount.face.links import Link
 from fourcount.face.measure_row import MeasureRow
 from fourcount.face.patient.table import PatientTable

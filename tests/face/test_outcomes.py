@@ -112,16 +112,16 @@ def test_arrows_go_through_the_tabs(three: Hands) -> None:
 
 
 def test_a_new_outcome_is_of_the_same_study(three: Hands) -> None:
-    """It stands behind the one in view, takes groups and span along, and the cursor is in its name."""
+    """It stands behind the one in view, takes groups and span along, and the cursor is in its first count."""
     three.write(three.window.printed.span, "12 months")
     three.write(three.window.printed.grid.labels["first"], "Night lights")
     three.click(bar(three).plus)
     assert tabs(three) == ["Falls", "Outcome 2", "Poor sleep", "Death"]
-    assert three.field == "name_text"
+    assert three.field == "first_left_text"
     assert three.texts == ("", "", "", "")
     assert three.window.printed.span.text() == "12 months"
     assert three.window.printed.grid.labels["first"].text() == "Night lights"
-    three.type("Pain")
+    three.write(three.window.printed.name, "Pain")
     assert tabs(three)[1] == "Pain"
     three.do("undo")
     three.do("undo")

@@ -53,6 +53,8 @@ def test_what_was_typed_for_another_way_stays(example: Hands) -> None:
     take(example, "rate")
     example.write(patient.start.shown[0], "12 per 1,000 person-years")
     take(example, "overall")
+    share = next(field for field in example.window.patient.start.shown if field.field == "exposed_share_text")
+    assert share.accessibleName() == "Share of people in the index group"
     take(example, "one")
     assert patient.baseline.text() == "12%"
     take(example, "rate")
@@ -199,3 +201,19 @@ def test_nothing_to_show_has_no_rows_and_no_buttons(hands: Hands) -> None:
     for widget in (patient.figures.show_patient, patient.figures.handout, patient.quiet, patient.figures.table):
         assert not widget.isVisible()
     assert patient.waits.isVisible()
+
+
+@pytest.mark.parametrize("overall", ["90%", "100%"])
+def test_where_no_start_gives_the_overall_risk_the_odds_ratio_is_one_press_away(example: Hands, overall: str) -> None:
+    """The reason is said, whatever else is pointed out, and the link that it speaks of is there."""
+    example.do("swap")
+    take(example, "overall")
+    for field, text in zip(example.window.patient.start.shown, (overall, "60%"), strict=True):
+        example.write(field, text)
+    patient = example.window.patient
+    assert "the odds ratio can be carried instead" in patient.waits.text()
+    assert patient.figures.odds.isVisible()
+    assert not patient.figures.picture.isVisible()
+    example.click(patient.figures.odds)
+    assert not patient.figures.odds.isVisible()
+    assert patient.waits.text() == ""

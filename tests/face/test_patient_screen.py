@@ -12,11 +12,12 @@ from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QAbstractButton, QApplication
 from pytestqt.qtbot import QtBot
 
+from fourcount.face import patient_screen
 from fourcount.face.patient_screen import PatientScreen, open_screen
 from fourcount.face.window import MainWindow
 from fourcount.record.outcome import Outcome
-from fourcount.record.paper import Record
-from patient_outcomes import AT_TWELVE, HARM, TRIAL, WELCOME
+from fourcount.record.paper import Choices, Record
+from patient_outcomes import AT_TWELVE, HARM, SMALL, TRIAL, WELCOME
 
 UNNAMED = replace(TRIAL, span_text="", name_text="Sleep")
 SEVERAL = Record(title_text="Night lights", outcomes=(AT_TWELVE, HARM, UNNAMED, WELCOME))
@@ -110,7 +111,7 @@ def test_it_is_refused_with_what_is_missing(open_window: Callable[..., MainWindo
     window = open_window(Record(outcomes=(UNNAMED,)))
     assert open_screen(window) is None
     assert window.banner.isVisible()
-    assert window.banner.words.text() == "Before a patient is shown this, fill in the time span."
+    assert window.banner.words.text() == "Before a patient is shown this, fill in “Time span”."
     window.session.edit_text("span_text", "12 months")
     assert open_screen(window) is not None
     assert not window.banner.isVisible()
@@ -138,7 +139,12 @@ def test_the_whole_page_is_told_to_a_screen_reader(opened: Opened) -> None:
     _, screen = opened()
     told = QAccessible.queryAccessibleInterface(screen.canvas)
     description = told.text(QAccessible.Text.Description)
-    for part in ("12 in 100", "6 fewer of these 100", "We cannot say which people.", "How sure the evidence is: not rated."):
+    for part in (
+        "12 in 100",
+        "6 fewer of these 100",
+        "We cannot say which people.",
+        "How sure the evidence is: not rated.",
+    ):
         assert part in description
     assert all(button.accessibleName() for button in screen.findChildren(QAbstractButton) if button.isVisible())
     press(screen, "Right")
@@ -225,3 +231,83 @@ def test_down_scrolls_a_page_that_is_taller(opened: Opened) -> None:
     QApplication.sendPostedEvents()
     press(screen, "Down")
     assert screen._scroll.verticalScrollBar().value() > 0
+
+
+def test_a_page_that_is_scrolled_to_is_drawn_inside_its_frame(opened: Opened, qtbot: QtBot) -> None:
+    """A page taller than the screen has a frame while it has the focus, and the page is seen in it."""
+    window, screen = opened(SMALL)
+    window.look.set_zoom(2.0)
+    screen.showNormal()
+    screen.resize(800, 700)
+    qtbot.waitUntil(screen.isActiveWindow)
+    screen.canvas.setFocus()
+    QApplication.sendPostedEvents()
+    assert screen.canvas.hasFocus()
+    assert screen.canvas.height() > screen._scroll.height()
+    image = screen.canvas.grab().toImage()
+    rows = [{image.pixelColor(x, y).name() for x in range(4, image.width() - 4, 3)} for y in range(4, 900, 9)]
+    assert any(len(shades) > 4 for shades in rows)
+    assert any(shades == {"#ffffff"} for shades in rows)
+
+
+def test_asked_for_twice_there_is_one(opened: Opened) -> None:
+    """The view that is open comes to the front, with the outcome that the window then shows."""
+    window, screen = opened()
+    window.session.look_at(1)
+    assert open_screen(window) is screen
+    assert title(screen) == "Bleeding in 12 months"
+    assert len(window.findChildren(PatientScreen)) == 1
+
+
+def test_one_that_was_left_is_not_found_again(opened: Opened) -> None:
+    """After Escape the next one is another."""
+    window, screen = opened()
+    press(screen, "Escape")
+    again = open_screen(window)
+    assert again is not None
+    assert again is not screen
+    assert again.isVisible()
+
+
+def test_arrows_turn_outcomes_from_every_link(opened: Opened, qtbot: QtBot) -> None:
+    """After Tab to the range or the way out, the arrows still lead to the next page and leave the focus where it is."""
+    _, screen = opened()
+    qtbot.waitUntil(screen.isActiveWindow)
+    screen.range.setFocus()
+    QTest.keyClick(screen.range, Qt.Key.Key_Right)
+    assert screen.place.text() == "2 of 3"
+    QTest.keyClick(screen.range, Qt.Key.Key_Left)
+    assert screen.place.text() == "1 of 3"
+    assert screen.range.hasFocus()
+    QTest.keyClick(screen.leave, Qt.Key.Key_Right)
+    assert screen.place.text() == "2 of 3"
+
+
+def test_it_keeps_its_outcome_while_others_move(opened: Opened) -> None:
+    """Moved, the outcome that the patient sees stays in view; edited too; removed, the window's own takes its place."""
+    window, screen = opened(*(replace(AT_TWELVE, name_text=name) for name in ("One", "Two", "Three", "Four")))
+    window.session.look_at(2)
+    open_screen(window)
+    assert title(screen) == "Three in 12 months"
+    window.outcomes.move_left()
+    assert (title(screen), screen.place.text()) == ("Three in 12 months", "2 of 4")
+    window.session.edit_text("name_text", "Third")
+    assert (title(screen), screen.place.text()) == ("Third in 12 months", "2 of 4")
+    window.outcomes.remove()
+    assert screen.place.text() == f"{window.session.view + 1} of 3"
+
+
+def test_a_keystroke_looks_at_what_changed_alone(opened: Opened, monkeypatch: pytest.MonkeyPatch) -> None:
+    """Of many outcomes one keystroke asks one whether it is ready, and what it says is on the page."""
+    window, screen = opened(*(replace(AT_TWELVE, name_text=f"Outcome {n}") for n in range(12)))
+    asked: list[str] = []
+    why_of = patient_screen.why_of
+
+    def counted(outcome: Outcome, choices: Choices) -> str:
+        asked.append(outcome.name_text)
+        return why_of(outcome, choices)
+
+    monkeypatch.setattr(patient_screen, "why_of", counted)
+    window.session.edit_text("name_text", "Falls")
+    assert asked == ["Falls"]
+    assert title(screen) == "Falls in 12 months"

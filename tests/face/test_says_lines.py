@@ -32,7 +32,7 @@ def test_the_flag_stands_on_its_measure_alone(measure: str, value: float, said: 
     flagged = {line.key: line for line in lines if line.mark is not None}
     assert list(flagged) == [measure]
     assert flagged[measure].mark == value
-    assert flagged[measure].note.endswith(f"Flag: your margin, {said}.")
+    assert flagged[measure].note.endswith(f"The flag is your margin, {said}.")
     before = next(line.note for line in plain if line.key == measure)
     assert flagged[measure].note.startswith(before)
 

@@ -122,11 +122,12 @@ def test_tab_walks_every_field_in_reading_order_and_comes_round(example: Hands) 
         window.printed.form, window.printed.layout_choice,
         grid.headings["left"], grid.headings["right"], grid.labels["first"], grid.labels["second"],
         *grid.cells.values(), rare.check.paper.measure, rare.check.paper.text, *window.printed.links,
-        *rare.optional.links.values(), *(example.row(key) for key in (*MEASURES, "test")),
+        *rare.optional.links.values(), window.says.sentence, *(example.row(key) for key in (*MEASURES, "test")),
         window.says.family, window.says.level, window.says.more, window.says.help, window.says.own_line_link,
         *window.says.copies, patient.start.kind, patient.baseline, patient.source, patient.effect,
-        patient.figures.show_patient, patient.figures.handout, patient.figures.draw,
-        patient.figures.copy, patient.figures.curve, *patient.quiet.links.values(), window.cautions,
+        patient.figures.picture, patient.figures.show_patient, patient.figures.handout, patient.figures.draw,
+        patient.figures.copy, patient.figures.curve, patient.figures.table, *patient.quiet.links.values(),
+        window.cautions,
     ]  # fmt: skip
     example.click(window.header.title)
     seen = []
@@ -254,13 +255,16 @@ def test_names_show_up_wherever_they_belong(example: Hands) -> None:
     assert example.rows["risk_index"].startswith("Risk, night lights: ")
     assert grid.cells[CELLS[0]].accessibleName() == "Night lights, fell"
     assert "with usual care 17 (17%) fell at least once" in window.patient.figures.picture.accessibleDescription()
-    assert "Still to be named" not in window.patient.figures.detail.text()
+    assert "Still to be filled in" not in window.patient.figures.detail.text()
 
 
 def test_a_picture_of_nameless_groups_says_what_is_missing(example: Hands) -> None:
     """Four counts alone are drawn with stand-in names, and the column lists what is still to be named."""
     detail = example.window.patient.figures.detail.text()
-    assert "Still to be named: the event, the reference group, the index group, the time span." in detail
+    assert (
+        "Still to be filled in: what happens to them (“People who”), the name of the reference group, "
+        "the name of the index group, “Time span”."
+    ) in detail
 
 
 def test_title_and_source_are_the_papers_own(hands: Hands) -> None:

@@ -142,3 +142,17 @@ def test_what_is_typed_is_text_in_tips_too(hands: Hands) -> None:
     tip = hands.window.header.title.toolTip()
     assert "<b>" not in tip
     assert 0 < len(tip) < 1_000
+
+
+def test_a_study_that_took_no_time_is_marked_and_said_nowhere(example: Hands) -> None:
+    """The figures stay; the span is missing where names are, until it is one."""
+    span = example.window.printed.span
+    example.write(span, "0 days")
+    assert span.marked
+    assert example.notes == ["0 days: a time span has to be longer than nothing"]
+    assert "0 days" not in example.sentence
+    assert "within" not in example.sentence
+    example.write(span, "30-day")
+    assert not span.marked
+    assert example.notes == []
+    assert "within 30 days" in example.sentence

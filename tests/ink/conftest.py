@@ -84,7 +84,7 @@ def picture() -> Callable[..., Picture]:
             key=(
                 KeyEntry("affected", f"fell {name}"),
                 KeyEntry("added", "falls added, on balance"),
-                KeyEntry("uncertain", "left open by the interval"),
+                KeyEntry("uncertain", "not settled by the study"),
                 KeyEntry("avoided", "falls avoided, on balance"),
                 KeyEntry("others", "did not fall"),
             ),

@@ -1,4 +1,4 @@
-"""The curve as drawn: names clear of one another, told by dash, the same bytes each time, no trace of when or where."""
+"""The files of a curve: the same bytes each time, every text in full, no trace of who made them, when or where."""
 
 from __future__ import annotations
 
@@ -13,72 +13,12 @@ import pytest
 from PySide6.QtCore import QStandardPaths
 from PySide6.QtGui import QImage
 
-from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.curve import curve, highest_start
-from fourcount.appraisal.findings import Gap
+from curves import AT_TWELVE, FOOT, RISING, parts
 from fourcount.ink import curve as pen_of_curve
 from fourcount.ink.curve import Format, draw_curve
-from fourcount.ink.curve_layout import CurveLayout, Sheet, dash_of
-from fourcount.ink.palette import DARK, LIGHT, PAPER, contrast
-from fourcount.picture.curve_axes import reach_for
-from fourcount.record.outcome import Outcome, Patient
-from fourcount.record.paper import Choices, Record
-from fourcount.wording.curve import View, curve_words, shown_lines, views
-from fourcount.wording.example import worked_example
-
-FOOT = ("Keep this in mind. Fourcount, some day.",)
-
-
-class Notes:
-    """A pen that draws nothing and remembers everything; a character is six pixels wide at 12."""
-
-    def __init__(self) -> None:
-        self.texts: list[tuple[float, float, float, str, float]] = []
-        self.lines: list[tuple[tuple, ...]] = []
-        self.widths: list[float] = []
-        self.areas: list[list[tuple[float, float, float]]] = []
-        self.points: list[tuple[float, float, str]] = []
-
-    def width(self, text: str, size: float, *_strong: object) -> float:
-        return len(text) * size / 2
-
-    def text(self, x, y, text, size, *_look, **_more) -> None:
-        self.texts.append((x, y, self.width(text, size), text, size))
-
-    def stroke(self, *_all) -> None:
-        pass
-
-    def set_axes(self, box, across, up, *_look) -> None:
-        self.box, self.across, self.up = box, across, up
-
-    def where(self, x: float, y: float) -> tuple[float, float]:
-        left, bottom, right, top = self.box
-        high = (y - self.up.low) / (self.up.high - self.up.low)
-        return left + (right - left) * x / self.across.high, bottom + (top - bottom) * high
-
-    def line(self, points, colour, width, dash=()) -> None:
-        self.lines.append((tuple(points), colour, dash))
-        self.widths.append(width)
-
-    def area(self, rows, *_look) -> None:
-        self.areas.append(rows)
-
-    def point(self, x, y, shape, *_look) -> None:
-        self.points.append((x, y, shape))
-
-
-def parts(outcome: Outcome, place: int = 0, *, whole: bool = False):
-    findings = appraise(outcome, Choices())
-    drawn = curve(findings, 1.0 if whole else reach_for(highest_start(findings)))
-    view = views(outcome, drawn)[place][0]
-    return drawn, view, curve_words(Record(outcomes=(outcome,)), outcome, findings, drawn, view)
-
-
-def laid(outcome: Outcome, place: int = 0, *, whole: bool = False, sheet: Sheet | None = None) -> Notes:
-    """What is drawn where, on a sheet of the usual size."""
-    notes = Notes()
-    CurveLayout(*parts(outcome, place, whole=whole), LIGHT, sheet or Sheet(760, 460)).draw(notes)
-    return notes
+from fourcount.ink.curve_sheet import Sheet
+from fourcount.ink.palette import PAPER
+from fourcount.record.outcome import Outcome
 
 
 def made(outcome: Outcome, kind: Format = "png", sheet: Sheet | None = None, place: int = 0) -> bytes:
@@ -88,98 +28,26 @@ def made(outcome: Outcome, kind: Format = "png", sheet: Sheet | None = None, pla
 @pytest.fixture
 def outcome() -> Outcome:
     """The worked example for a patient who starts at 12%."""
-    return msgspec.structs.replace(worked_example().outcomes[0], patient=Patient(starting_risk_text="12%"))
+    return AT_TWELVE
 
 
 @pytest.fixture
-def rising(outcome: Outcome) -> Outcome:
+def rising() -> Outcome:
     """A table whose risk ratio passes 100%."""
-    cells = {"first_left_text": "60", "first_right_text": "140", "second_left_text": "22", "second_right_text": "178"}
-    return msgspec.structs.replace(outcome, table=msgspec.structs.replace(outcome.table, **cells))
+    return RISING
 
 
-# The layout
-
-
-@pytest.mark.parametrize("zoom", [1.0, 1.5, 2.0])
-@pytest.mark.parametrize("place", [0, 1, 2, 3])
-@pytest.mark.parametrize("whole", [False, True])
-def test_no_text_lies_on_another(rising: Outcome, zoom: float, place: int, whole: bool) -> None:
-    """At every text size, in every view, names keep apart and stay on the sheet."""
-    sheet = Sheet(760 * zoom, 460 * zoom, zoom)
-    texts = laid(rising, place, whole=whole, sheet=sheet).texts
-    for i, (x, y, wide, _, size) in enumerate(texts):
-        assert x >= 0
-        assert x + wide <= sheet.width
-        assert size / 2 <= y <= sheet.height - size / 2
-        for x2, y2, wide2, _, size2 in texts[i + 1 :]:
-            apart = x + wide <= x2 or x2 + wide2 <= x or abs(y - y2) >= min(size, size2)
-            assert apart
-
-
-def test_lines_are_told_without_colour(outcome: Outcome) -> None:
-    """Each line has a dash of its own, and each has its name on the sheet."""
-    drawn, view, words = parts(outcome)
-    dashes = [dash_of(line) for line in shown_lines(drawn, view)]
-    assert len(set(dashes)) == len(dashes) == 3
-    found = " ".join(text for *_, text, _ in laid(outcome).texts)
-    assert all(name.split(",")[0] in found for name in words.names)
-    assert max(laid(outcome).widths) == 2.6  # the line that is chosen is the thickest
-
-
-def test_nothing_drawn_lies_beyond_the_axes(rising: Outcome) -> None:
-    """No line, band or point leaves what the axes show, so that nothing is cut off."""
-    for place in range(4):
-        notes = laid(rising, place, whole=True)
-        values = [value for points, *_ in notes.lines for value in points]
-        values += [(x, y) for x, y, _ in notes.points]
-        values += [(x, y) for rows in notes.areas for x, low, high in rows for y in (low, high)]
-        assert values
-        assert all(0 <= x <= notes.across.high for x, _ in values)
-        assert all(notes.up.low <= y <= notes.up.high * (1 + 1e-12) for _, y in values)
-
-
-def test_a_line_stops_where_its_risk_is_100(rising: Outcome) -> None:
-    """The risk ratio's line ends at 100%, at one over the ratio; the band is filled as far as both limits go."""
-    drawn, *_ = parts(rising, whole=True)
-    ratio = drawn.lines[0]
-    notes = laid(rising, whole=True)
-    longest = next(points for (points, *_), width in zip(notes.lines, notes.widths, strict=True) if width == 2.6)
-    assert longest[-1] == pytest.approx((ratio.last, 1.0))
-    (rows,) = notes.areas
-    assert rows[-1][2] == pytest.approx(1.0)
-    both = [point.start for point in ratio.points if not isinstance(point.high, Gap)]
-    assert rows[-1][0] == both[-1]
-
-
-def test_the_study_is_square_and_the_patient_round(outcome: Outcome) -> None:
-    """The two points differ in shape, and stand at their own risks."""
-    notes = laid(outcome)
-    assert notes.points == [
-        (70 / 409, 38 / 412, "square"),
-        (0.12, pytest.approx(0.12 * (38 / 412) / (70 / 409)), "round"),
-    ]
-
-
-def test_nothing_to_draw_is_a_sentence() -> None:
-    """Without any effect the sheet has the reason and no axes."""
-    findings = appraise(Outcome(), Choices())
-    drawn = curve(findings)
-    notes = Notes()
-    words = curve_words(Record(), Outcome(), findings, drawn, View())
-    CurveLayout(drawn, View(), words, LIGHT, Sheet(400, 300)).draw(notes)
-    assert " ".join(text for *_, text, _ in notes.texts) == words.notes[0]
-    assert not notes.lines
-
-
-@pytest.mark.parametrize("palette", [LIGHT, DARK])
-def test_lines_stand_out_from_the_page(palette) -> None:
-    """Lines and points have 3:1 at least against the page, and their names 4.5:1."""
-    assert min(contrast(part, palette.page) for part in (palette.ink, palette.accent, palette.muted)) >= 4.5
-    assert contrast(palette.outline, palette.page) >= 3
-
-
-# The files
+@pytest.mark.parametrize("kind", ["png", "svg", "pdf"])
+def test_words_of_any_length_are_drawn(outcome: Outcome, kind: Format) -> None:
+    """Also with real letters; a drawing says the whole of what it cuts where it is described."""
+    span = "within two years and a day " * 74
+    outcome = msgspec.structs.replace(outcome, span_text=span, name_text=span, left_words_text=span)
+    for sheet in (Sheet(360, 240), Sheet(500, 340, foot=FOOT)):
+        data = made(outcome, kind, sheet)
+        if kind == "svg":
+            described = re.search(r"<dc:description>(.*?)</dc:description>", data.decode(), re.DOTALL)
+            assert described is not None
+            assert described[1].count(span.strip()) >= 2
 
 
 @pytest.mark.parametrize("kind", ["png", "svg", "pdf"])
@@ -233,14 +101,6 @@ def test_any_characters_are_drawn(outcome: Outcome) -> None:
     assert made(outcome, "png")
     assert made(outcome, "svg")
     assert made(outcome, "pdf")
-
-
-def test_a_very_long_name_is_cut_to_its_room(outcome: Outcome) -> None:
-    """One endless word does not push the axes off the sheet."""
-    outcome = msgspec.structs.replace(outcome, first_label_text="x" * 3000, name_text="y" * 3000)
-    notes = laid(outcome)
-    assert all(x + wide <= 760 for x, _, wide, *_ in notes.texts)
-    assert notes.box[2] > notes.box[0] + 200
 
 
 def test_figures_do_not_stay(outcome: Outcome, monkeypatch: pytest.MonkeyPatch) -> None:

@@ -15,7 +15,10 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.ink.handout import MARGIN, PAPERS, PER_MM, Handout, NoPage, compose
 from fourcount.ink.handout_file import DOTS, as_pdf, as_png, as_svg, page_image, writer_for
 from fourcount.ink.palette import PAPER
+from fourcount.ink.paper_style import PaperStyle
+from fourcount.ink.plain_picture import captions, on_one_line
 from fourcount.picture.common import common_denominator
+from fourcount.picture.options import USUAL
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, LONG, SHOWN, SMALL, TINY, TRIAL, WELCOME
@@ -248,3 +251,79 @@ def test_states_differ_in_grey() -> None:
 def test_the_kind_of_file_follows_from_its_name(name: str, known: bool) -> None:
     """PDF, PNG and SVG by their suffix, however it is written; nothing else."""
     assert (writer_for(name) is not None) == known
+
+
+@pytest.mark.parametrize(
+    ("outcomes", "told"),
+    [((AT_TWELVE, HAZARD), True), ((AT_TWELVE, HARM), True), ((TRIAL, HARM), False), ((AT_TWELVE,), False)],
+    ids=["two starts", "typed and the study's", "the study's", "one"],
+)
+def test_heads_say_where_people_differ(outcomes: tuple[Outcome, ...], told: bool) -> None:
+    """Where two outcomes show people who start differently each head says who they are, not a line of small print."""
+    said = squeezed(pdf_texts(as_pdf(made(*outcomes))))
+    starts = [squeezed(f"{name}, for people") in said for name in ("Falls in 12 months", "Bleeding in 12 months")]
+    assert any(starts) == told
+    assert (squeezed("These people") in said) != told
+
+
+@pytest.mark.parametrize("outcomes", [(AT_TWELVE, HARM), (AT_TWELVE, HARM, WELCOME)], ids=["two", "three"])
+@pytest.mark.parametrize("paper", PAPERS)
+def test_people_are_large_where_few_outcomes_stand(outcomes: tuple[Outcome, ...], paper: str) -> None:
+    """Of two or three outcomes people are drawn as persons at least 14 units of 1/96 inch, near 4 mm, apart."""
+    page = made(*outcomes, paper=paper)
+    style, setting, array = page._fit
+    wide = (page.paper.width - 2 * MARGIN) * PER_MM
+    assert all(block.has_persons(style, setting, wide, array) for block in page._blocks)
+    assert array >= 140
+
+
+def test_rows_of_persons_do_not_touch() -> None:
+    """Beside their captions persons stand in rows with white between feet and heads, and a key beside each array."""
+    it = made(AT_TWELVE, HARM, WELCOME)._blocks[0]._aside
+    laid, icons = it._laid(PaperStyle(), 320, 150)
+    assert icons == "person"
+    assert laid.height == pytest.approx(150)
+    assert laid.y(1) - laid.y(0) > 1.1 * laid.down
+    assert [entry.text for entry in it._entries(1)] == ["spared, on balance"]
+
+
+@pytest.mark.parametrize("width", range(60, 420, 24))
+def test_captions_of_both_groups_break_alike(width: int) -> None:
+    """At any width both groups' captions have the same lines: if one percentage goes to its own line, both do."""
+    words = made(AT_TWELVE)._blocks[0]._it.words
+    one, two = captions(PaperStyle(), (words.without, words.with_), width)
+    assert len(one) == len(two) in (3, 4)
+    if len(one) == 3:
+        assert all(on_one_line(caption[1], width) for caption in (one, two))
+        assert one[1][0].font == two[1][0].font
+
+
+def test_a_page_of_bars_says_nothing_of_marks() -> None:
+    """Where nothing is drawn as people nothing is said of what one of them is; beside people only of those."""
+    lead = made(TINY).words.lead
+    assert "person" not in lead
+    assert made(TRIAL, TINY).words.lead.startswith("Each figure is one person.")
+
+
+@pytest.mark.parametrize("count", range(1, 5))
+def test_the_range_is_on_the_page_where_it_is_asked_for(count: int) -> None:
+    """One to four outcomes with their ranges fit a page, drawn and said; without limits that is said."""
+    alone = replace(HAZARD, paper_text="0.72")
+    outcomes = (AT_TWELVE, HARM, alone, WELCOME)[:count]
+    named = [(outcome, appraise(outcome, Choices())) for outcome in outcomes]
+    page = compose(RECORD, named, PAPERS["a4"], "9.8.7", TODAY, USUAL._replace(uncertainty=True))
+    assert isinstance(page, Handout)
+    assert page.words.description.count("it could be from") == count - (count > 2)
+    notes = [block._aside._words.note for block in page._blocks]
+    assert all("it could be from" in note or note == "A range cannot be given here." for note in notes)
+
+
+def test_the_number_that_fits_makes_a_page() -> None:
+    """So many as the sentence says are a page, and one more are not, however many outcomes there are."""
+    outcomes = (AT_TWELVE, HARM, WELCOME, HAZARD) * 50
+    page = page_of(*outcomes)
+    assert isinstance(page, NoPage)
+    fits = int(page.sentence.split()[0])
+    assert page.sentence == f"{fits} of these 200 outcomes fit on one page: untick {200 - fits}."
+    assert isinstance(page_of(*outcomes[:fits]), Handout)
+    assert isinstance(page_of(*outcomes[: fits + 1]), NoPage)

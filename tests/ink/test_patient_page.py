@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import pytest
+from msgspec.structs import replace
 from PySide6.QtGui import QColor, QImage, QPainter
 
 from fourcount.appraisal.appraise import appraise
@@ -13,7 +14,7 @@ from fourcount.ink.plain_picture import Shown, picture_words, shown
 from fourcount.picture.options import USUAL
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
-from patient_outcomes import AT_TWELVE, CASE_CONTROL, HAZARD, LONG, SHOWN, TINY, TRIAL, WELCOME
+from patient_outcomes import AT_TWELVE, CASE_CONTROL, HARM, HAZARD, LONG, SHOWN, SMALL, TINY, TRIAL, WELCOME, of_counts
 
 ROOMS = [(1280, 740), (1024, 640), (800, 560), (1920, 1020), (480, 360)]
 
@@ -75,6 +76,28 @@ def test_a_larger_room_makes_a_larger_page() -> None:
     assert page.style(1920, 1020).scale > 1.3 * page.style(1024, 640).scale
 
 
+def test_what_makes_a_difference_doubtful_cannot_be_missed() -> None:
+    """That there may be none stands in the size and ink of the difference; what else may explain it comes next."""
+    page = PatientPage(ready(replace(SMALL, design="cohort")))
+    style = page.style(1280, 740)
+    runs = {run.text: run for paragraph, _ in page._below(style, 1200) for run in paragraph}
+    difference, *others = runs.values()
+    doubts = [run for run in others if "leaves open" in run.text]
+    assert [(run.font, run.colour) for run in doubts] == [(difference.font, difference.colour)]
+    explained = next(run for run in others if run.text.startswith("Other things"))
+    assert explained.colour == PAPER.ink
+    assert explained.font.pixelSize() > style.font("body").pixelSize()
+
+
+@pytest.mark.parametrize("room", ROOMS[:2], ids=str)
+def test_counts_stay_on_their_line(room: tuple[int, int]) -> None:
+    """On a usual screen text is made somewhat smaller rather than that a count or its percentage wraps."""
+    for outcome in (TRIAL, AT_TWELVE, WELCOME, HAZARD, CASE_CONTROL):
+        page = PatientPage(ready(outcome))
+        style = page.style(*room)
+        assert not page._picture.counts_wrap(style, page._wide(style, room[0]))
+
+
 def test_paper_colours_are_read_easily() -> None:
     """Ink and muted text have 4.5:1 on white, icons 3:1."""
     assert contrast(PAPER.ink, PAPER.page) >= 4.5
@@ -107,6 +130,15 @@ def test_the_range_is_drawn_only_where_it_is_asked_for() -> None:
     assert ranged.plan.with_.uncertain == 12 - 7
 
 
+@pytest.mark.parametrize("ranged", [False, True])
+def test_the_key_has_no_number_that_the_range_would_change(ranged: bool) -> None:
+    """Fewer of the difference's figures are drawn where the range takes their place; those spared do not "fall"."""
+    for outcome, state, text in ((AT_TWELVE, "avoided", "spared, on balance"), (HARM, "added", "added, on balance")):
+        key = {entry.state: entry.text for entry in picture_words(ready(outcome, ranged)).key}
+        assert key[state] == text
+        assert key["uncertain"] == "not settled by the study"
+
+
 def test_one_array_says_what_it_shows_of_both_groups() -> None:
     """In one array, filled figures have it with both, and outlined ones with neither."""
     it = ready(AT_TWELVE)
@@ -118,11 +150,29 @@ def test_one_array_says_what_it_shows_of_both_groups() -> None:
     assert {entry.text for entry in picture_words(it).key} >= {"fall at least once", "do not fall"}
 
 
+@pytest.mark.parametrize(
+    ("outcome", "said"), [(TRIAL, "Each figure is one person."), (SMALL, "Each mark is one person.")]
+)
+def test_what_an_icon_stands_for_is_said_as_it_is_drawn(outcome: Outcome, said: str) -> None:
+    """A hundred are figures, a thousand marks, whichever icons were chosen."""
+    page = PatientPage(ready(outcome))
+    style = page.style(1280, 740)
+    said_above = [run.text for runs, _ in page._above(style, 1200) for run in runs]
+    assert said in said_above
+
+
 def test_what_is_too_small_to_draw_speaks_of_whole_people() -> None:
     """Bars, and a number of people of whom whole ones can be told."""
     it = ready(TINY)
     assert it.plan.denominator is None
     assert it.words.without.number == "1 in 1,000,000"
+
+
+def test_only_a_difference_can_be_too_small_to_draw() -> None:
+    """50% against 50.00000001% are risks that could be drawn; the difference could not."""
+    it = ready(of_counts(TRIAL, (500_000_100, 499_999_900, 500_000_000, 500_000_000)))
+    assert picture_words(it).note.startswith("The difference is too small to draw as people.")
+    assert picture_words(ready(TINY)).note.startswith("The risks are too small to draw as people.")
 
 
 def test_a_paragraph_is_as_high_as_it_says() -> None:

@@ -185,6 +185,20 @@ def test_a_wish_that_cannot_be_met_is_one_sentence(given: dict[str, Any]) -> Non
         answer(*TABLE, **given)
 
 
+@pytest.mark.parametrize(
+    ("given", "start"),
+    [
+        ({"matters": 0.05}, "The difference that matters must be"),
+        ({"matters": "RD 200%"}, "The difference that matters cannot"),
+        ({"adjusted": "x"}, "The adjusted effect must be"),
+    ],
+)
+def test_a_sentence_calls_an_option_by_a_noun(given: dict[str, Any], start: str) -> None:
+    """Not "the matters", nor "the adjusted"."""
+    with pytest.raises(ValueError, match=f"^{start} "):
+        answer(*TABLE, **given)
+
+
 def test_an_argument_that_is_not_there() -> None:
     """A name that is misspelt is a mistake of the program that calls."""
     with pytest.raises(TypeError, match="basline"):

@@ -60,7 +60,7 @@ ACTIONS: dict[str, tuple[Any, set[str]]] = {
     "where": (lambda outcome: editing.with_where(outcome, "abstract"), {"where"}),
     "paper": (lambda outcome: editing.with_paper_measure(outcome, "hazard_ratio"), {"paper_measure"}),
     "start": (lambda outcome: editing.with_start_kind(outcome, "three"), {"patient"}),
-    "line": (lambda outcome: editing.with_line_kind(outcome, "margin"), {"line_kind"}),
+    "line": (lambda outcome: editing.with_line_kind(outcome, "margin"), {"line_kind", "line_side"}),
     "scale": (lambda outcome: editing.with_line_scale(outcome, "odds_ratio"), {"line_scale"}),
     "side": (lambda outcome: editing.with_line_side(outcome, "more"), {"line_side"}),
     "certainty": (lambda outcome: editing.with_certainty(outcome, "very-low"), {"certainty"}),

@@ -241,6 +241,16 @@ def test_without_a_line_no_side_changes() -> None:
     assert editing.swap_groups(Outcome(line_text=" ")).line_side == "fewer"
 
 
+@pytest.mark.parametrize(("welcome", "matters", "margin"), [(False, "fewer", "more"), (True, "more", "fewer")])
+def test_an_empty_line_goes_where_such_lines_lie(welcome: bool, matters: str, margin: str) -> None:
+    """A margin lies on the worse side, what would matter on the better one; a typed line stays on its side."""
+    outcome = Outcome(left_welcome=welcome)
+    assert editing.with_line_kind(outcome, "matters").line_side == matters
+    assert editing.with_line_kind(editing.with_line_kind(outcome, "matters"), "margin").line_side == margin
+    typed = Outcome(left_welcome=welcome, line_kind="matters", line_side=matters, line_text="5%")
+    assert editing.with_line_kind(typed, "margin").line_side == matters
+
+
 @pytest.mark.parametrize(
     ("choose", "field", "words"),
     [

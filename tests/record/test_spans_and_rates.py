@@ -5,7 +5,7 @@ from __future__ import annotations
 import pytest
 from hypothesis import given
 
-from fourcount.record.entry.duration import read_duration
+from fourcount.record.entry.duration import marks_of_study_span, read_duration
 from fourcount.record.entry.person_rate import read_rate
 from fourcount.record.entry.readings import Blank, Duration, RateReading, Unreadable
 from nearly import ANY_TEXT, NEARLY
@@ -154,3 +154,19 @@ def test_every_text_gets_an_answer(text: str) -> None:
     if isinstance(rate, RateReading):
         assert 0 <= rate.value <= 1e9
     assert all(len(str(each.facts["text"])) <= 40 for each in (span, rate) if isinstance(each, Unreadable))
+
+
+@pytest.mark.parametrize(
+    ("text", "key"),
+    [("0 days", "duration-not-above-zero"), ("-3 days", "duration-not-above-zero"), ("101 years", "duration-too-long")],
+)
+def test_a_study_that_took_no_time_is_marked(text, key):
+    """Such a span is not used; its mark says why."""
+    (mark,) = marks_of_study_span(text)
+    assert (mark.field, mark.key, mark.facts, mark.used) == ("span_text", key, {"text": text}, False)
+
+
+@pytest.mark.parametrize("text", ["", "12 months", "30-day", "median 2 years", "12", "inpatient stay", "1 to 5 years"])
+def test_words_in_place_of_a_study_span_are_no_mistake(text):
+    """They are said as typed, though no risk can be carried from them to another span."""
+    assert marks_of_study_span(text) == ()

@@ -264,11 +264,13 @@ def test_equal_risks_are_in_order() -> None:
         ({"start_kind": "one", "starting_risk_text": "100 in 100"}, "starting_risk_text", "risk-of-everybody"),
         ({"start_kind": "three", "low_risk_text": "0"}, "low_risk_text", "risk-of-nobody"),
         ({"start_kind": "overall", "overall_risk_text": "100%"}, "overall_risk_text", "risk-of-everybody"),
+        ({"start_kind": "overall", "exposed_share_text": "0%"}, "exposed_share_text", "share-of-nobody"),
+        ({"start_kind": "overall", "exposed_share_text": "100%"}, "exposed_share_text", "share-of-everybody"),
     ],
 )
 def test_nobody_and_everybody_are_read_and_pointed_out(changes: dict[str, str], field: str, key: str) -> None:
-    """The risk is used as typed; a share of 0% says nothing of the kind."""
-    marks = read_start(patient(exposed_share_text="0%", **changes)).marks
+    """The risk is used as typed."""
+    marks = read_start(patient(**changes)).marks
     assert [(mark.field, mark.key, mark.used) for mark in marks] == [(field, key, True)]
 
 

@@ -8,7 +8,8 @@ import pytest
 from hypothesis import given, settings
 from hypothesis import strategies as st
 
-from fourcount.stats.conversion import risk_ratio_from_odds_ratio, risk_with
+from fourcount.stats.conversion import risk_ratio_from_odds_ratio, risk_with, unbounded_risk
+from fourcount.stats.hazards import over_spans
 from fourcount.stats.results import GAP_KEYS, Gap
 
 RISKS = st.floats(1e-9, 1 - 1e-9)
@@ -58,6 +59,14 @@ def test_the_last_bit_of_100_percent_is_no_excess() -> None:
     ratio, baseline = 11 / 9, 9 / 11
     assert ratio * baseline > 1
     assert risk_with("risk_ratio", ratio, baseline) == 1.0
+
+
+def test_the_last_bit_to_100_percent_is_none_over_a_shorter_span() -> None:
+    """1/r times r is everybody, over a day as over a year; so is 0.9 and 0.1 more."""
+    for events in range(1, 350):
+        ratio = events / 350
+        assert over_spans(unbounded_risk("risk_ratio", 1 / ratio, ratio), 1 / 365) == 1.0
+    assert unbounded_risk("risk_difference", 0.1, 0.9) == 1.0
 
 
 def test_infinite_effects() -> None:

@@ -119,4 +119,4 @@ def test_extreme_effects_keep_the_mixture(measure: Effect, ratio: float) -> None
 
 def test_a_starting_risk_of_all_but_nobody_is_a_gap() -> None:
     """Where the unexposed would have to be everybody to the last digit, no effect can be carried from there."""
-    assert starting_risk_from_overall("hazard_ratio", 1e-12, 0.7, 0.5) == Gap("beyond-one")
+    assert starting_risk_from_overall("hazard_ratio", 1e-12, 0.7, 0.5) == Gap("next-to-certain")

@@ -15,7 +15,7 @@ from statsmodels.stats.proportion import proportion_confint
 from fourcount.stats.conversion import Effect, risk_with
 from fourcount.stats.hazards import over_spans
 from fourcount.stats.normal import quantile
-from fourcount.stats.propagation import Limits, Propagated, StartLimits, limits_of_counts, propagated
+from fourcount.stats.propagation import Limits, Propagated, StartLimits, limits_as_typed, limits_of_counts, propagated
 from fourcount.stats.results import Gap, Interval
 from tables import LEVELS
 
@@ -158,7 +158,6 @@ def test_a_certain_starting_risk_leaves_the_effect_alone(effect: Effect) -> None
     assert found.difference.low == pytest.approx(low - 0.2, rel=1e-12)
     assert found.difference.high == pytest.approx(high - 0.2, rel=1e-12)
     assert found.risk_ratio == Limits(low=pytest.approx(low / 0.2), high=pytest.approx(high / 0.2))
-    assert found.without == Limits(low=0.2, high=0.2)
 
 
 @pytest.mark.parametrize("effect", RATIOS)
@@ -182,13 +181,13 @@ def test_it_shrinks_to_the_effects_limits_as_the_starting_risk_grows_certain(eff
 def test_a_certain_effect_leaves_the_starting_risks_limits(ratio: float) -> None:
     """With a risk ratio that is certain, Newcombe's Wilson limits of 15/148 (1998) are multiplied by it."""
     interval = Interval(low=ratio, high=ratio)
-    found = given_one(propagated("risk_ratio", ratio, interval, 0.95, start_of(15, 148)))
-    assert found.without.low == pytest.approx(0.0624, abs=5e-5)  # Newcombe 1998, Stat Med 17:857, Table I
-    assert found.without.high == pytest.approx(0.1605, abs=5e-5)
-    assert isinstance(found.without.low, float)
-    assert isinstance(found.without.high, float)
-    assert found.with_.low == pytest.approx(found.without.low * ratio, rel=1e-12)
-    assert found.with_.high == pytest.approx(found.without.high * ratio, rel=1e-12)
+    start = start_of(15, 148)
+    found = given_one(propagated("risk_ratio", ratio, interval, 0.95, start))
+    low, high = start.at(-quantile(0.95)), start.at(quantile(0.95))
+    assert low == pytest.approx(0.0624, abs=5e-5)  # Newcombe 1998, Stat Med 17:857, Table I
+    assert high == pytest.approx(0.1605, abs=5e-5)
+    assert found.with_.low == pytest.approx(low * ratio, rel=1e-12)
+    assert found.with_.high == pytest.approx(high * ratio, rel=1e-12)
 
 
 def test_a_constant_difference_has_its_own_limits() -> None:
@@ -301,12 +300,37 @@ def test_another_span_changes_both_risks(
     effect, estimate, interval = one
     own = given_one(propagated(effect, estimate, interval, 0.95, start_of(*counts)))
     other = given_one(propagated(effect, estimate, interval, 0.95, start_of(*counts), spans))
-    for before, after in ((own.without, other.without), (own.with_, other.with_)):
-        for value, seen in ((before.low, after.low), (before.high, after.high)):
-            if isinstance(value, Gap):
-                assert seen == value
-            else:
-                assert seen == pytest.approx(over_spans(value, spans), rel=1e-9, abs=1e-12)
+    for value, seen in ((own.with_.low, other.with_.low), (own.with_.high, other.with_.high)):
+        if isinstance(value, Gap):
+            assert seen == value
+        else:
+            assert seen == pytest.approx(over_spans(value, spans), rel=1e-9, abs=1e-12)
+
+
+@pytest.mark.parametrize("total", [1, 7, 10, 25, 201, 99_999])
+def test_everybody_has_no_upper_limit_but_itself(total: int) -> None:
+    """25 of 25 is 100% to the last bit, over a twelfth of the span too."""
+    assert start_of(total, total).at(1.96) == 1.0
+
+
+def test_where_risks_end_is_no_limit() -> None:
+    """RR 1.4 (1.2 to 2.0) from 60% (57 to 74%) to five times the span: on both sides the risk with passes 100%.
+
+    The least difference of those that are left would be 1 minus the risk without just where the risk with reaches 100%.
+    """
+    start = limits_as_typed(0.60, 0.57, 0.74, 0.95)
+    assert isinstance(start, StartLimits)
+    found = given_one(propagated("risk_ratio", 1.4, Interval(low=1.2, high=2.0), 0.95, start, 5.0))
+    assert found.difference == found.risk_ratio == Limits(low=Gap("beyond-one"), high=Gap("beyond-one"))
+    assert isinstance(found.with_.low, float)
+
+
+def test_no_difference_at_nobody_takes_a_risk_below_zero() -> None:
+    """A difference of exactly 0 (-8 to 8 points) from 1% (0 to 2%): no ratio lies at minus infinity."""
+    start = limits_as_typed(0.01, 0.0, 0.02, 0.95)
+    assert isinstance(start, StartLimits)
+    found = given_one(propagated("risk_difference", 0.0, Interval(low=-0.08, high=0.08), 0.95, start))
+    assert found.risk_ratio.low == Gap("carried-beyond-zero")
 
 
 def test_the_difference_over_another_span_is_not_the_old_one() -> None:

@@ -8,10 +8,12 @@ import msgspec
 import pytest
 
 from fourcount.appraisal.appraise import appraise
-from fourcount.appraisal.findings import OutcomeFindings
+from fourcount.appraisal.findings import OutcomeFindings, PatientFindings
 from fourcount.record.outcome import CELLS, EventsAndOthers, Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording.example import worked_example
+from fourcount.wording.plain_outcome import PlainWords, plain_words
+from fourcount.wording.plain_risks import plain_risks
 
 OutcomeOf = Callable[..., Outcome]
 
@@ -36,3 +38,17 @@ def findings_of() -> Callable[..., OutcomeFindings]:
         return appraise(outcome, choices or Choices())
 
     return follow
+
+
+@pytest.fixture
+def say(findings_of: Callable[..., OutcomeFindings]) -> Callable[..., PlainWords]:
+    """The words of an outcome, of 100 people unless told otherwise."""
+
+    def words(outcome: Outcome, people: int = 100) -> PlainWords:
+        patient = findings_of(outcome).patient
+        assert isinstance(patient, PatientFindings)
+        risks = plain_risks(patient, outcome.welcome)
+        assert risks is not None
+        return plain_words(outcome, patient, risks, people)
+
+    return words

@@ -7,8 +7,12 @@ import pytest
 from forms import CONFOUNDED, at_time, effect_only, of_total, paired, percent_of_total, strata
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Caution
+from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
 from fourcount.wording.cautions import caution_text
+
+AT_TWELVE = Patient(starting_risk_text="12%")
+RATIO_AT_TWELVE = Patient(starting_risk_text="12%", effect="risk_ratio")
 
 
 def cautions_of(outcome, choices=None):
@@ -137,6 +141,47 @@ def cautions_of(outcome, choices=None):
             (
                 "The pairs are alike in what they were matched for; other differences between cases and controls may "
                 "explain the odds ratio."
+            ),
+        ),
+        (
+            paired("matched", patient=AT_TWELVE),
+            "observational",
+            (
+                "The pairs are alike in what they were matched for; other differences between cases and controls may "
+                "explain the odds ratio, and what is carried to 12% is adjusted for none of them."
+            ),
+        ),
+        (
+            of_total(design="case-control", patient=AT_TWELVE),
+            "observational",
+            (
+                "A case-control study does not assign its groups: these are crude figures, the odds ratio carried to "
+                "12% as well, and other differences between the groups may explain them."
+            ),
+        ),
+        (
+            of_total(design="case-control", patient=AT_TWELVE),
+            "rests-on-baseline",
+            (
+                "Totals are those of cases and controls, as many as the study took, so that no risk follows from them: "
+                "every risk, difference and number needed here rests on the starting risk of 12%, which is not from "
+                "this study, and on the odds ratio being the same there."
+            ),
+        ),
+        (
+            of_total(design="cohort", adjusted_text="0.61 (0.42 to 0.88)", patient=RATIO_AT_TWELVE),
+            "crude-beside-adjusted",
+            (
+                "The figures of this table are crude, and so is the risk ratio carried to 12%; the paper’s own odds "
+                "ratio, adjusted, is 0.61, and can be carried instead."
+            ),
+        ),
+        (
+            of_total(design="cohort", adjusted_text="0.61 (0.42 to 0.88)"),
+            "observational",
+            (
+                "A cohort study does not assign its groups, and can adjust only for what it measured: other "
+                "differences between the groups may explain crude and adjusted figures alike."
             ),
         ),
         (

@@ -24,14 +24,12 @@ from fourcount.wording.curve import (
     NO_EFFECT,
     NOTHING,
     OTHER_SPAN,
-    CurveRow,
     CurveWords,
     View,
-    curve_head,
-    curve_rows,
     curve_words,
     views,
 )
+from fourcount.wording.curve_table import CurveRow, curve_head, curve_rows
 
 BANNED = re.compile(
     r"\b(significan\w*|(un)?likely|chances?|rare(ly)?|common|high risk|nan|None|inf|should|recommend\w*)\b|[{}]"
@@ -77,14 +75,14 @@ def test_lines_are_named_with_their_values(at_12: Outcome) -> None:
     assert said(at_12).names == (
         "risk ratio 0.54 (95% interval 0.37 to 0.78)",
         "odds ratio 0.49",
-        "risk difference 7.9 fewer per 100, below 0% up to 7.9%",
+        "risk difference 7.9 fewer per 100; at starting risks under 7.9% the risk would fall below 0%",
     )
 
 
 def test_a_line_that_passes_everybody_says_from_where(outcome_of: Callable[..., Outcome]) -> None:
     """A risk ratio of 2.73 takes the risk past 100% from 36.7% on."""
     words = said(outcome_of((60, 140, 22, 178), patient=Patient(starting_risk_text="30%")))
-    assert words.names[0].endswith(", past 100% from 36.7%")
+    assert words.names[0].endswith("; at starting risks over 36.7% the risk would pass 100%")
     assert "Where one limit would pass 100%" in " ".join(words.notes)
 
 
@@ -94,6 +92,41 @@ def test_the_sentence_says_what_each_effect_comes_to(at_12: Outcome) -> None:
         "At a starting risk of 17.1%, the study’s own: 9.2%, whichever effect is kept constant. At a starting risk of "
         "12%: 6.5% with the risk ratio kept constant, 6.3% with the odds ratio, 4.1% with the risk difference."
     )
+
+
+def test_what_ends_early_is_the_risk_not_the_difference(at_12: Outcome) -> None:
+    """No line's name can be read as if the difference itself lay below 0%; a survey says so of prevalences."""
+    survey = msgspec.structs.replace(at_12, design="survey")
+    assert said(at_12).names[2].endswith("the risk would fall below 0%")
+    assert "starting prevalences under 7.9% the prevalence would fall below 0%" in said(survey).names[2]
+
+
+def test_a_patient_without_a_point_is_told_why(outcome_of: Callable[..., Outcome]) -> None:
+    """In the view whose effect leads past 100%, and only there; a starting risk that is missing has its own reason."""
+    outcome = outcome_of((60, 40, 30, 70), patient=Patient(starting_risk_text="60%"))
+    why = "The patient at 60% has no point here: with the risk ratio the risk would pass 100%."
+    assert why in said(outcome, View(place=0)).notes
+    for view in (View(place=1), View(place=2), View(ratios=True)):
+        assert not [note for note in said(outcome, view).notes if "no point" in note]
+    bare = said(outcome_of(design="case-control"))
+    assert [note for note in bare.notes if note.startswith("No patient has a point here. ")]
+
+
+def test_each_view_says_its_own_assumption_once(at_12: Outcome) -> None:
+    """Risks keep each line's effect, the risk ratio of an odds ratio keeps the odds ratio."""
+    risks, ratios = said(at_12), said(at_12, View(ratios=True))
+    assert " ".join(risks.notes).count("assumption") == " ".join(ratios.notes).count("assumption") == 1
+    assert ratios.notes[0].startswith("The odds ratio is kept the same at every starting risk.")
+
+
+def test_the_description_has_every_text_in_full(at_12: Outcome) -> None:
+    """Axes, names, sentence and notes, whatever length the drawing has room for."""
+    long = msgspec.structs.replace(at_12, span_text="a span " * 285, first_label_text="a treatment " * 166)
+    for view in (View(), View(ratios=True)):
+        words = said(long, view)
+        for text in (words.across, words.up, *words.names, words.sentence, *words.notes):
+            assert text in words.described
+    assert said(Outcome(), View()).described == NOTHING
 
 
 def test_the_notes_say_what_is_assumed(at_12: Outcome) -> None:
@@ -129,7 +162,7 @@ def test_another_time_span_is_not_drawn_but_said(at_12: Outcome) -> None:
 def test_the_odds_ratio_is_said_as_a_risk_ratio(at_12: Outcome) -> None:
     """The second view gives the risk ratio at the points, and at the odds ratio's own line its name."""
     words = said(at_12, View(ratios=True))
-    assert words.up == "Risk ratio (odds ratio kept constant)"
+    assert words.up == "Risk ratio with the odds ratio kept constant (logarithmic axis)"
     assert words.itself == "the odds ratio itself"
     assert words.sentence.endswith("At a starting risk of 12%: the odds ratio is a risk ratio of 0.52.")
 
@@ -151,7 +184,7 @@ def test_the_table_holds_the_points_among_round_risks(at_12: Outcome) -> None:
     rows = table(at_12)
     assert list(rows) == ["0%", "10%", "12% (this patient)", "17.1% (the study)", "20%", "30%", "40%"]
     assert rows["12% (this patient)"][0] == "6.5% (4.5 to 9.3%)"
-    assert rows["0%"][2] == "below 0%"
+    assert rows["0%"] == ("0%", "0%", "below 0%")  # nobody stays nobody: there is no interval
 
 
 def test_the_table_of_ratios_has_one_column(at_12: Outcome) -> None:

@@ -142,10 +142,9 @@ def meaning(key, outcome):
         (
             effect_only(),
             (
-                "The paper prints a hazard ratio: at any moment, among people still without it, the rate of the "
-                "event with night lights was 0.72 times that with usual care (95% interval 0.55 to 0.92). There "
-                "are no counts to check it against, and it compares rates from moment to moment, and is no risk "
-                "ratio."
+                "The paper prints a hazard ratio: at any moment, among people who have not had the event yet, its "
+                "rate with night lights was 0.72 times that with usual care (95% interval 0.55 to 0.92). There are no "
+                "counts to check it against, and it compares rates from moment to moment: it is no risk ratio."
             ),
         ),
         (

@@ -52,6 +52,8 @@ MARK_KEYS = (
     "risk-unlike-percent",
     "limits-need-sign",
     "risk-of-nobody",
+    "share-of-nobody",
+    "share-of-everybody",
     "risk-of-everybody",
     "low-above-high",
     "high-below-low",
@@ -199,10 +201,11 @@ def test_a_caution_without_its_facts_is_still_a_sentence(key):
 
 def test_a_caution_says_the_numbers_it_is_about():
     """The risk ratio kept constant names both risks."""
-    text = cautions.caution_text(Caution(key="effect-kept-constant", facts=FACTS))
+    other = {**FACTS, "other": 0.0356, "becomes": 0.0647}
+    text = cautions.caution_text(Caution(key="effect-kept-constant", facts=other))
     assert text == (
-        "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%; keeping the risk ratio "
-        "of not having the event constant instead would give other figures."
+        "The risk ratio is assumed to be the same at 12% as at the study’s own 17.1%; with the risk ratio of not "
+        "having the event kept instead, 12% would become 3.6%, not 6.5%."
     )
     by_odds = cautions.caution_text(Caution(key="effect-kept-constant", facts={**FACTS, "effect": "odds_ratio"}))
     assert by_odds == "The odds ratio is assumed to be the same at 12% as at the study’s own 17.1%."

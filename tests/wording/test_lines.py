@@ -60,6 +60,7 @@ def test_relative_words_and_the_other_outcome_stand_under_the_risk_ratio(outcome
     [
         ("", ""),
         ("12%", "as a risk ratio at 12%: 0.52 (0.35 to 0.77)"),
+        ("12.25%", "as a risk ratio at 12.25%: 0.52 (0.35 to 0.77)"),
     ],
 )
 def test_the_odds_ratio_is_followed_by_its_risk_ratio(outcome_of, findings_of, starting_risk, note):
@@ -196,10 +197,10 @@ def test_each_limit_of_a_difference_has_the_word_it_needs(low, high, estimate, t
 @pytest.mark.parametrize(
     ("low", "high", "estimate", "text"),
     [
-        (0.02, Gap("beyond-one"), 0.05, "2.0 to past 100%"),
-        (-0.02, Gap("beyond-one"), -0.01, "2.0 fewer to past 100%"),
-        (Gap("beyond-one"), 0.02, 0.01, "past 100% to 2.0 more"),
-        (Gap("beyond-one"), -0.02, -0.05, "2.0 to past 100%"),
+        (0.02, Gap("beyond-one"), 0.05, "2.0 to an open end"),
+        (-0.02, Gap("beyond-one"), -0.01, "2.0 fewer to an open end"),
+        (Gap("beyond-one"), 0.02, 0.01, "an open end to 2.0 more"),
+        (Gap("beyond-one"), -0.02, -0.05, "2.0 to an open end"),
         (Gap("formula-beyond-risks"), -0.02, -0.05, "2.0 to a withheld limit"),
     ],
 )
@@ -231,12 +232,13 @@ WITHHELD = Gap("beyond-one")
 @pytest.mark.parametrize(
     ("kind", "low", "high", "through", "text"),
     [
-        ("NNTH", WITHHELD, (28.0, "NNTH"), False, "up to 28; the lower limit is withheld"),
-        ("NNTH", WITHHELD, (9.0, "NNTB"), True, "NNTH, limit withheld, to ∞ to NNTB 9"),
-        ("NNTB", (3.0, "NNTB"), WITHHELD, True, "NNTB 3 to ∞ to NNTH, limit withheld"),
-        ("NNTH", (3.0, "NNTH"), WITHHELD, True, "NNTH 3 to ∞ to NNTB, limit withheld"),
-        ("neither", (3.0, "NNTB"), WITHHELD, True, "NNTB 3 to ∞ to NNTH, limit withheld"),
-        ("neither", (math.inf, "NNTH"), WITHHELD, False, "from ∞; the upper limit is withheld"),
+        ("NNTH", WITHHELD, (28.0, "NNTH"), False, "up to 28; at the other limit the risk would pass 100%"),
+        ("NNTH", WITHHELD, (9.0, "NNTB"), True, "NNTH, limit not given, to ∞ to NNTB 9"),
+        ("NNTB", (3.0, "NNTB"), WITHHELD, True, "NNTB 3 to ∞ to NNTH, limit not given"),
+        ("NNTH", (3.0, "NNTH"), WITHHELD, True, "NNTH 3 to ∞ to NNTB, limit not given"),
+        ("neither", (3.0, "NNTB"), WITHHELD, True, "NNTB 3 to ∞ to NNTH, limit not given"),
+        ("NNTB", (3.0, "NNTB"), Gap("formula-beyond-risks"), False, "from 3; the other limit is not given"),
+        ("neither", (math.inf, "NNTH"), WITHHELD, False, "from ∞; at the other limit the risk would pass 100%"),
     ],
 )
 def test_a_withheld_limit_of_a_number_needed_is_said_to_be(kind, low, high, through, text):
@@ -257,7 +259,7 @@ def test_a_limit_beyond_everybody_is_said_beside_the_row(outcome_of, findings_of
         "53.7 to 106.3",
         "the bare formula reaches past 100 in 100",
     )
-    assert lines["number_needed"].interval == "up to 2; the lower limit is withheld"
+    assert lines["number_needed"].interval == "up to 2; the other limit is not given"
     assert lines["number_needed"].note == gap_text(Gap("formula-beyond-risks"))
 
 
@@ -270,6 +272,8 @@ def test_a_limit_beyond_both_ends_is_said_so(outcome_of, findings_of):
 def test_a_risk_without_an_upper_limit_keeps_its_sign():
     """The sign of per cent stands behind the last number there is."""
     assert limits.percent_interval(Range(low=0.138, high=Gap("beyond-one")), 0.171) == "13.8% to past 100%"
+    assert limits.ratio_interval(Range(low=1.38, high=Gap("beyond-one")), 1.71) == "1.38 to an open end"
+    assert limits.relative_interval(Range(low=1.38, high=Gap("beyond-one")), 1.71) == "38% to an open end"
     assert limits.percent_interval(Interval(low=0.138, high=0.211), 0.171) == "13.8 to 21.1%"
 
 

@@ -56,14 +56,21 @@ def test_a_group_without_a_label_has_a_stand_in(outcome_of):
     ("span", "within", "over"),
     [
         ("12 months", "within 12 months", "over 12 months"),
-        ("at 5 years", "at 5 years", "at 5 years"),
+        ("at 5 years", "within 5 years", "over 5 years"),
+        ("30-day", "within 30 days", "over 30 days"),
+        ("Over 1 y.", "within 1 year", "over 1 year"),
+        ("median 2 years", "within median 2 years", "over median 2 years"),
+        ("at discharge", "at discharge", "at discharge"),
+        ("0 days", "", ""),
+        ("-3 days", "", ""),
+        ("1000000 years", "", ""),
         ("During the stay", "During the stay", "During the stay"),
         ("inpatient stay", "within inpatient stay", "over inpatient stay"),
         ("  ", "", ""),
     ],
 )
 def test_a_span_takes_a_preposition_unless_it_has_one(outcome_of, span, within, over):
-    """Within after a verb, over under a figure."""
+    """Within after a verb, over under a figure; a time is said in one form, and what is no time is not said."""
     outcome = outcome_of(span_text=span)
     assert (names.within_span(outcome), names.over_span(outcome)) == (within, over)
 
@@ -99,7 +106,7 @@ def test_a_column_without_a_name_keeps_its_own_words(outcome_of, counted, left, 
     outcome = outcome_of(counted=counted, left_words_text=left, right_words_text=right, **headings)
     assert (names.event_words(outcome), names.other_words(outcome)) == (event, other)
     assert names.event_key(outcome) == event
-    assert names.other_key(outcome) == (f"did not have the outcome “{event}”" if other == "did not" else other)
+    assert names.other_key(outcome) == ("all others" if other == "did not" else other)
 
 
 def test_the_other_outcome_follows_what_is_counted(outcome_of):

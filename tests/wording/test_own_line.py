@@ -85,10 +85,11 @@ def test_a_margin_on_the_worse_side() -> None:
     ],
 )
 def test_better_and_worse_are_those_of_the_margin(worse_side: bool, lies: str, side: str) -> None:
-    """Which side is better does not hang on which side of no effect the margin lies."""
+    """Which side is better does not hang on which side of no effect the margin lies; that is said by itself."""
     line = msgspec.structs.replace(a_margin(), worse_side=worse_side, lies=lies)
     said = line_sentence(Outcome(), line)
     assert f"{side} of your margin" in said
+    assert ("2 more per 100 (itself better than no effect)" in said) != worse_side
     assert "against an effect at the margin or worse" in said
 
 
@@ -115,8 +116,8 @@ def test_the_value_is_said_on_its_scale(measure: str, value: float, said: str) -
     """A difference per 100 with its side, a ratio as a ratio; the mark says whose it is."""
     line = a_line(measure=measure, value=value)
     assert value_text(line) == said
-    assert mark_words(line) == f"Flag: your line, {said}."
-    assert mark_words(msgspec.structs.replace(line, kind="margin")) == f"Flag: your margin, {said}."
+    assert mark_words(line) == f"The flag is your line, {said}."
+    assert mark_words(msgspec.structs.replace(line, kind="margin")) == f"The flag is your margin, {said}."
 
 
 def test_the_measure_and_the_level_are_named() -> None:

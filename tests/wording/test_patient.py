@@ -108,8 +108,8 @@ def test_a_limit_beyond_everybody_leaves_the_estimate(outcome_of, findings_of):
     """The range says that it has no upper limit, and why."""
     words = words_of(outcome_of(patient=at("45%"), index_group="second"), findings_of)
     assert words.with_count == "84 in 100"
-    assert words.summary == "over 12 months, 95% interval 13 to past 100%"
-    assert words.detail.count("100%") == 1
+    assert words.summary == "over 12 months, 95% interval 13 to an open end"
+    assert words.detail.count("100%") == 2
     assert words.detail.endswith(
         "The upper limit of the risk would pass 100%, so the interval is open there; carrying the odds ratio avoids "
         "it. The interval leaves out that 45% is itself uncertain."
@@ -124,10 +124,15 @@ def test_without_a_starting_risk_a_case_control_study_says_what_it_needs(outcome
 
 
 def test_what_is_not_named_yet_is_listed(findings_of, outcome_of):
-    """Event, both groups and time, before any patient sees a picture."""
+    """Event, both groups and time, as their fields are called, before any patient sees a picture."""
     bare = Outcome(table=outcome_of().table)
     words = words_of(bare, findings_of)
-    assert words.missing == ("the event", "the reference group", "the index group", "the time span")
+    assert words.missing == (
+        "what happens to them (“People who”)",
+        "the name of the reference group",
+        "the name of the index group",
+        "“Time span”",
+    )
     assert words.without_title == "Without: reference group"
 
 
@@ -167,7 +172,7 @@ def test_summary_range_and_caution_look_the_same_way(outcome_of, findings_of, we
             )
             leaning = [caution for caution in findings_of(outcome).cautions if caution.key == "leans"]
             words = words_of(outcome, findings_of, 10_000)
-            ends = re.search(r"interval (?:([\d,]+) fewer) to (?:([\d,]+) more|past 100%)$", words.summary)
+            ends = re.search(r"interval (?:([\d,]+) fewer) to (?:([\d,]+) more|an open end)$", words.summary)
             side = re.match(r"[\d,]+ (fewer|more) ", words.summary_bold)
             if side is None or ends is None:
                 assert not leaning

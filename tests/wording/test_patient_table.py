@@ -11,7 +11,7 @@ from fourcount.appraisal.findings import Gap
 from fourcount.record.outcome import Patient
 from fourcount.record.paper import Choices
 from fourcount.wording.patient import patient_words
-from fourcount.wording.patient_table import patient_table, patient_table_head
+from fourcount.wording.patient_table import patient_table, patient_table_head, rows_sentence
 
 RR, OR, HR = effect(0.54, 0.37, 0.78), effect(0.49, 0.32, 0.75), effect(0.72, 0.55, 0.92)
 UP = effect(1.86, 1.29, 2.69)
@@ -105,3 +105,14 @@ def test_no_patient_has_no_table():
     found = msgspec.structs.replace(findings_with(outcome, carried("hazard_ratio", HR, 0.2)), patient=Gap("not-typed"))
     assert patient_table(found, Choices()) == []
     assert patient_table_head(outcome, found, Choices()).without == "Without: usual care"
+
+
+def test_a_table_read_out_has_one_full_stop_a_row():
+    """A row without figures is its reason, which is a sentence by itself; the others go on."""
+    patient = carried("risk_ratio", RR, 0.12, rank="usual", low=Gap("low-above-usual"), high=HIGH)
+    found = findings_with(THREE, patient)
+    rows, head = patient_table(found, Choices(), 100), patient_table_head(THREE, found, Choices(), 100)
+    said = rows_sentence(rows, head)
+    assert said.startswith("Low: The low risk lies above the usual one; check which is which. Usual, 12%: Without: ")
+    assert ".." not in said
+    assert said.endswith("Number needed (95% interval): NNTB 9 (7 to 19).")

@@ -9,9 +9,10 @@ from typing import NamedTuple
 import pytest
 from hypothesis import given
 from hypothesis import strategies as st
+from msgspec import structs
 
 from fourcount.appraisal.findings import OutcomeFindings
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import Outcome, PersonTime, Table
 from fourcount.record.paper import Choices
 from fourcount.wording.picture_words import USUAL_WORDS, PictureWords, Said, picture_words
 from fourcount.wording.relative_words import RelativeWords, relative_words
@@ -51,9 +52,11 @@ def words_of(
         asked: Asked = TWO,
         said: Said = USUAL_WORDS,
         bar_top: float = 0.25,
+        table: Table | None = None,
         **changes: object,
     ) -> PictureWords:
         outcome = outcome_of(**changes)
+        outcome = outcome if table is None else structs.replace(outcome, table=table)
         return picture_words(outcome, findings_of(outcome), CHOICES, drawn, asked, said, bar_top)
 
     return make
@@ -159,7 +162,7 @@ def test_the_key_names_every_state(words_of: Callable[..., PictureWords]) -> Non
     assert [tuple(entry) for entry in words_of(Drawn(0.12, 0.06)).key] == [
         ("affected", "fell"),
         ("added", "falls added, on balance"),
-        ("uncertain", "left open by the interval"),
+        ("uncertain", "not settled by the study"),
         ("avoided", "falls avoided, on balance"),
         ("others", "did not fall"),
     ]
@@ -171,6 +174,27 @@ def test_one_array_says_what_happens_either_way(words_of: Callable[..., PictureW
     texts = {entry.state: entry.text for entry in words.key}
     assert (texts["affected"], texts["others"]) == ("fell either way", "did not fall either way")
     assert (words.without.number, words.with_.number) == ("12 in 100", "6 in 100")
+
+
+def test_the_others_are_never_called_what_the_affected_are(words_of: Callable[..., PictureWords]) -> None:
+    """Person-time has no other column, and another form's may have no name: the rest are all others."""
+    rates = PersonTime(
+        first_left_text="38",
+        first_right_text="4120",
+        second_left_text="70",
+        second_right_text="4090",
+        unit_text="years",
+    )
+    unnamed = {"right_heading_text": "", "right_words_text": ""}
+    named = {**unnamed, "left_words_text": "fell at least once", "left_heading_text": ""}
+    for changes in ({"table": rates, **named}, named):
+        key = {entry.state: entry.text for entry in words_of(Drawn(0.2, 0.1), **changes).key}
+        assert (key["affected"], key["others"]) == ("fell at least once", "all others")
+        key = {entry.state: entry.text for entry in words_of(Drawn(0.2, 0.1), Asked("one"), **changes).key}
+        assert (key["affected"], key["others"]) == ("fell at least once either way", "all others")
+    nothing = {**unnamed, "left_words_text": "", "left_heading_text": "", "table": rates}
+    key = {entry.state: entry.text for entry in words_of(Drawn(0.2, 0.1), **nothing).key}
+    assert (key["affected"], key["others"]) == ("had the event", "did not have the event")
 
 
 def test_a_welcome_outcome_says_what_is_filled(words_of: Callable[..., PictureWords]) -> None:

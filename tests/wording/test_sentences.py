@@ -210,7 +210,7 @@ def test_a_number_needed_without_one_limit_says_why(outcome_of, findings_of):
     """Wald's difference of 9/10 v 1/10 passes 100 in 100, where no number needed is."""
     outcome, choices = outcome_of((9, 1, 1, 9)), Choices(family="textbook")
     sentence = measure_sentence("number_needed", outcome, findings_of(outcome, choices), choices)
-    assert sentence.startswith("NNTH 2 (95% interval up to 2; the lower limit is withheld): ")
+    assert sentence.startswith("NNTH 2 (95% interval up to 2; the other limit is not given): ")
     assert sentence.endswith(gap_text(Gap("formula-beyond-risks")))
 
 

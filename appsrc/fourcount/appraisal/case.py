@@ -36,6 +36,17 @@ def no_effect_of(measure: str) -> float:
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
+class ForTheReader:
+    """What hangs on what the reader typed beside the table: a patient, and a line of their own."""
+
+    conversion: Conversion | Gap
+    patient: PatientFindings | Gap
+    carriable: tuple[Carriable, ...] = ()
+    line: OwnLine | Gap | None = None
+    marks: tuple[Mark, ...] = ()
+
+
+@dataclass(frozen=True, kw_only=True, slots=True)
 class Case:
     """One outcome with the figures that its form and its design support.
 
@@ -48,14 +59,15 @@ class Case:
     choices: Choices
     figures: Figures
     test: Probability | Gap
-    conversion: Conversion | Gap
-    patient: PatientFindings | Gap
+    reader: ForTheReader
     marks: tuple[Mark, ...] = ()
     extras: Extras = field(default_factory=Extras)
     strata: StrataFindings | Gap | None = None
     randomised: tuple[Randomised, ...] = ()
-    carriable: tuple[Carriable, ...] = ()
-    line: OwnLine | Gap | None = None
+
+    @property
+    def patient(self) -> PatientFindings | Gap:
+        return self.reader.patient
 
     @property
     def counts(self) -> Counts:
@@ -76,12 +88,20 @@ class Case:
         return self.patient
 
 
+def at_start(carried: PatientFindings) -> Facts:
+    """The starting risk, and where it comes from unless it was typed: a computed one has other digits."""
+    facts: Facts = {"baseline": carried.baseline}
+    return facts if carried.start_from == "typed" else {**facts, "start": carried.start_from}
+
+
 def straddles(interval: Interval | Range | Gap, no_effect: float) -> bool | None:
     """Whether no effect lies strictly inside the interval; None where the interval does not tell.
 
-    A withheld limit is one at which a risk would pass 100%: an upper one lies beyond no effect.
+    An upper limit that is withheld since a risk would pass 100% lies beyond no effect; no other one tells.
     """
     if isinstance(interval, Gap) or isinstance(interval.low, Gap):
+        return None
+    if isinstance(interval.high, Gap) and interval.high.key != "beyond-one":
         return None
     beyond = isinstance(interval.high, Gap) or interval.high > no_effect
     return interval.low < no_effect and beyond

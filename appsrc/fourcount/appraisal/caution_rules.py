@@ -7,9 +7,7 @@ from collections.abc import Mapping
 from types import MappingProxyType
 
 from fourcount.appraisal.case import Case, Facts, excludes, no_effect_of, straddles, value
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL
-from fourcount.appraisal.extras.printed import is_adjusted
-from fourcount.appraisal.findings import Gap, Interval, PrintedFigure
+from fourcount.appraisal.findings import Gap, Interval
 from fourcount.record.outcome import COUNTED_FORMS, Form
 
 HEADLINES = (
@@ -75,15 +73,11 @@ def odds_ratio_differs(case: Case) -> Facts | None:
 
 
 def totals_are_sampled(case: Case) -> Facts | None:
-    """The investigator of a case-control study chose how many cases and controls there are."""
-    return {} if case.outcome.design == "case-control" else None
+    """The investigator of a case-control study chose how many cases and controls there are.
 
-
-def observational(case: Case) -> Facts | None:
-    """The groups were not made alike by chance, and the figures are crude, or pooled over strata at the most."""
-    if case.outcome.design not in OBSERVATIONAL or _adjusted(case):
-        return None
-    return {"design": case.outcome.design, **_strata(case)}
+    Where an effect is carried, what all rests on says so.
+    """
+    return {} if case.outcome.design == "case-control" and case.carried is None else None
 
 
 def zero_cells(case: Case) -> Facts | None:
@@ -152,16 +146,6 @@ def leans(case: Case) -> Facts | None:
     if difference < 0 and reaches_up:
         return {"side": "more"}
     return {"side": "fewer"} if difference > 0 and reaches_down else None
-
-
-def _adjusted(case: Case) -> bool:
-    """Whether the table is an effect that was adjusted for something."""
-    return isinstance(case.given, PrintedFigure) and is_adjusted(case.given, case.outcome)
-
-
-def _strata(case: Case) -> Facts:
-    """How many strata are pooled, where any are: then not all figures are crude."""
-    return {} if case.pooled is None else {"strata": len(case.pooled.strata)}
 
 
 def _survey(case: Case) -> Facts:

@@ -2,41 +2,24 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
-from dataclasses import dataclass
 from functools import partial
 
-from fourcount.appraisal import carrying_caution_rules as carrying
 from fourcount.appraisal import caution_rules as rules
+from fourcount.appraisal import confounding_rules as confounding
 from fourcount.appraisal import form_caution_rules as form_rules
-from fourcount.appraisal.case import Case, Facts
+from fourcount.appraisal.carrying.cautions import OF_A_START, OF_AN_EFFECT
+from fourcount.appraisal.case import Case
 from fourcount.appraisal.findings import Caution
+from fourcount.appraisal.rule import Rule
 from fourcount.record.outcome import COUNTED_FORMS, FORMS, Form
 
 __all__ = ["CAUTIONS", "Case", "Rule", "cautions_for"]
-
-
-@dataclass(frozen=True, kw_only=True, slots=True)
-class Rule:
-    """A caution: its key, when it holds, of which forms it is asked, and where it comes from.
-
-    A rule answers with the facts for its sentence, with None, or with the facts of several sentences. One that is
-    ``about_cells`` is asked even where the table gives no figure at all.
-    """
-
-    key: str
-    holds: Callable[[Case], Facts | tuple[Facts, ...] | None]
-    source: str
-    forms: tuple[Form, ...] = tuple(FORMS)
-    about_cells: bool = False
-
 
 TABLES: tuple[Form, ...] = (*COUNTED_FORMS, "strata")
 """The forms that give four counts."""
 
 WITHOUT_CLUSTERS: tuple[Form, ...] = ("strata", "pairs", "person-time")
 """The forms whose intervals are not corrected for clusters."""
-
 
 CAUTIONS: tuple[Rule, ...] = (
     *(
@@ -162,40 +145,7 @@ CAUTIONS: tuple[Rule, ...] = (
         forms=TABLES,
         source="Holcomb 2001 (odds ratios read as risk ratios; the threshold of 20%); Knol 2012",
     ),
-    Rule(
-        key="effect-kept-constant",
-        holds=carrying.effect_kept_constant,
-        source="Cochrane Handbook 5.1, 12.5.3; Kent 2018",
-    ),
-    Rule(
-        key="effect-kept-elsewhere",
-        holds=carrying.kept_elsewhere,
-        source="Cochrane Handbook 5.1, 12.5.3; Kent 2018",
-    ),
-    Rule(
-        key="difference-kept-constant",
-        holds=carrying.difference_kept_constant,
-        source="Cochrane Handbook 5.1, 9.4.4.4 (differences vary more than ratios); Deeks 2002, from memory",
-    ),
-    Rule(
-        key="baseline-far",
-        holds=carrying.baseline_far,
-        source="Kent 2018 and PATH 2020 (an average effect hides variation with risk); half to twice: common practice",
-    ),
-    Rule(
-        key="constant-rates",
-        holds=carrying.constant_rates,
-        source="common practice: a ratio of constant rates is a ratio of hazards",
-    ),
-    Rule(key="other-span", holds=carrying.other_span, source="common practice: constant hazards"),
-    Rule(
-        key="solved-from-overall",
-        holds=carrying.solved_from_overall,
-        source="common practice: the risk of all is that of the exposed and the unexposed by their shares",
-    ),
-    Rule(key="from-a-rate", holds=carrying.from_a_rate, source="common practice: 1 - exp(-rate x time)"),
-    Rule(key="baseline-uncertain", holds=carrying.baseline_uncertain, source="Cochrane Handbook 5.1, 12.5.4.5"),
-    Rule(key="rests-on-baseline", holds=carrying.rests_on_baseline, source="Knol 2012; common practice"),
+    *OF_A_START,
     Rule(
         key="totals-are-sampled",
         holds=rules.totals_are_sampled,
@@ -203,45 +153,22 @@ CAUTIONS: tuple[Rule, ...] = (
         source="Cornfield 1951 (the odds ratio alone does not depend on the sampling), from memory; common practice",
     ),
     Rule(
-        key="controls-over-time",
-        holds=carrying.controls_over_time,
-        source="Knol, Vandenbroucke and others 2008 (what case-control studies estimate), from memory",
-    ),
-    Rule(
         key="observational",
-        holds=rules.observational,
+        holds=confounding.observational,
         source="STROBE item 16a (unadjusted and confounder-adjusted estimates)",
     ),
     Rule(
         key="adjusted-effect",
-        holds=form_rules.adjusted_effect,
+        holds=confounding.adjusted_effect,
         source="STROBE item 16a; VanderWeele and Ding 2017",
     ),
     Rule(
         key="crude-beside-adjusted",
-        holds=form_rules.crude_beside_adjusted,
+        holds=confounding.crude_beside_adjusted,
         forms=tuple(form for form in FORMS if form != "effect-only"),
         source="STROBE item 16a (unadjusted and confounder-adjusted estimates)",
     ),
-    Rule(
-        key="crude-carried",
-        holds=carrying.crude_carried,
-        source="STROBE item 16a (unadjusted and confounder-adjusted estimates)",
-    ),
-    Rule(
-        key="within-pairs",
-        holds=carrying.within_pairs,
-        source="Greenland, Robins and Pearl 1999 (collapsibility), from memory",
-    ),
-    Rule(key="adjusted-opposite", holds=carrying.adjusted_opposite, source="common practice"),
-    Rule(key="adjusted-turned", holds=carrying.adjusted_turned, source="common practice"),
-    Rule(key="carried-level", holds=carrying.carried_level, source="common practice"),
-    Rule(key="converted-limits", holds=carrying.converted_limits, source="McNutt 2003"),
-    Rule(
-        key="adjusted-converted",
-        holds=carrying.adjusted_converted,
-        source="McNutt 2003",
-    ),
+    *OF_AN_EFFECT,
     Rule(key="zero-cells", holds=rules.zero_cells, forms=COUNTED_FORMS, source="Cochrane Handbook 5.1, 9.2.2.2"),
     Rule(
         key="half-added",

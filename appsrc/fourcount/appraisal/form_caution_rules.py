@@ -3,8 +3,7 @@
 from __future__ import annotations
 
 from fourcount.appraisal.case import Case, Facts, value
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL
-from fourcount.appraisal.extras.printed import is_adjusted, level_of
+from fourcount.appraisal.extras.printed import level_of
 from fourcount.appraisal.findings import Clusters, Figure, Gap, Losses, PrintedFigure, Recovered, TimedRisks
 from fourcount.stats.strata_sums import informative, smallest_expected
 
@@ -163,31 +162,6 @@ def printed_level(case: Case) -> Facts | None:
     return None if abs(level - case.choices.level) < 1e-9 else {"level": level, "chosen": case.choices.level}
 
 
-def adjusted_effect(case: Case) -> Facts | None:
-    """An effect outside trials was adjusted, for what the authors measured and no more."""
-    outcome = case.outcome
-    if outcome.design not in OBSERVATIONAL:
-        return None
-    printed = isinstance(case.given, PrintedFigure) and is_adjusted(case.given, outcome)
-    carried = case.carried is not None and case.carried.adjusted
-    return {"design": outcome.design, "adjusted_for": _adjusted_for(case)} if printed or carried else None
-
-
-def crude_beside_adjusted(case: Case) -> Facts | None:
-    """Outside trials the paper prints an adjusted effect, and the figures here are crude."""
-    printed = case.extras.adjusted
-    if printed is None or printed.estimate is None or case.outcome.design not in OBSERVATIONAL:
-        return None
-    facts: Facts = {"measure": printed.measure, "value": printed.estimate.text, "adjusted_for": _adjusted_for(case)}
-    if printed.unit != "one":
-        facts["print_unit"] = printed.unit
-    return facts if case.pooled is None else {**facts, "strata": len(case.pooled.strata)}
-
-
 def concordant_unknown(case: Case) -> Facts | None:
     """Only the discordant pairs are typed, so that nothing but the odds ratio follows."""
     return {} if isinstance(case.given, Gap) and isinstance(case.figures.get("pair_odds_ratio"), Figure) else None
-
-
-def _adjusted_for(case: Case) -> str:
-    return " ".join(case.outcome.adjusted_for_text.split())

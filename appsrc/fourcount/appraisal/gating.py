@@ -9,6 +9,9 @@ from types import MappingProxyType
 from fourcount.appraisal.findings import MEASURES, PAIR_MEASURES, RATE_MEASURES, TIMED_MEASURES, CarriedEffect
 from fourcount.record.outcome import PAIRED_DESIGNS, Design, Outcome
 
+OBSERVATIONAL: tuple[Design, ...] = ("cohort", "survey", "case-control", "matched")
+"""The designs whose groups are compared as they are found."""
+
 Withheld = Mapping[str, str]
 
 NOTHING_WITHHELD: Withheld = MappingProxyType({})

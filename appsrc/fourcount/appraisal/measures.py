@@ -68,28 +68,38 @@ def _measure(key: str, figures: Figures, support: Support, *, welcome: bool) -> 
     return figure
 
 
-def number_needed_from(difference: Figure, *, welcome: bool) -> AnyNumberNeeded | Gap:
+def number_needed_from(difference: Figure, *, welcome: bool, beside: bool = False) -> AnyNumberNeeded | Gap:
     """The number needed to treat from a difference and its interval (Altman 1998).
 
-    Where one limit of the difference is withheld, so is the limit that would be its reciprocal, and nothing else.
+    Where one limit of the difference is withheld, so is the limit that would be its reciprocal, and nothing else. Such
+    a limit lies beyond 0 on its own side, or, ``beside`` it, on the side of the other one.
     """
     estimate, interval = difference.estimate, difference.interval
     if isinstance(estimate, Gap):
         return estimate
     if isinstance(interval, Range):
-        return _half_known(estimate, interval, welcome=welcome)
+        return _half_known(estimate, interval, welcome=welcome, beside=beside)
     return interval if isinstance(interval, Gap) else number_needed(estimate, interval, unwelcome=not welcome)
 
 
-def _half_known(difference: float, interval: Range, *, welcome: bool) -> NumberNeededRange:
-    """An endless limit stands in for the one withheld: it lies on the same side, and its reciprocal is 0."""
-    low = -math.inf if isinstance(interval.low, Gap) else interval.low
-    high = math.inf if isinstance(interval.high, Gap) else interval.high
+def number_needed_alone(difference: float, reason: Gap, *, welcome: bool) -> NumberNeededRange:
+    """The number needed of a difference without any interval: both limits are withheld, for the one reason."""
+    needed = number_needed(difference, Interval(low=difference, high=difference), unwelcome=not welcome)
+    return NumberNeededRange(
+        estimate=needed.estimate, kind=needed.kind, low=reason, high=reason, through_infinity=False
+    )
+
+
+def _half_known(difference: float, interval: Range, *, welcome: bool, beside: bool) -> NumberNeededRange:
+    """A limit without end, whose reciprocal is 0, stands in for the one withheld; beside 0 it is 0 itself."""
+    stand_in = 0.0 if beside else math.inf
+    low = -stand_in if isinstance(interval.low, Gap) else interval.low
+    high = stand_in if isinstance(interval.high, Gap) else interval.high
     reason = interval.low if isinstance(interval.low, Gap) else interval.high
     needed = number_needed(difference, Interval(low=low, high=high), unwelcome=not welcome)
 
     def given(limit: NumberNeededLimit) -> NumberNeededLimit | Gap:
-        return reason if isinstance(reason, Gap) and limit.value == 0 else limit
+        return reason if isinstance(reason, Gap) and limit.value == (math.inf if beside else 0.0) else limit
 
     return NumberNeededRange(
         estimate=needed.estimate,

@@ -41,11 +41,9 @@ def _between(difference: Figure, least: float, most: float) -> Figure:
 
 
 def _ends(risk: Figure) -> tuple[float, float]:
-    """The limits of a risk, cut to what a risk can be; the estimate itself where the formula gives no width."""
-    if isinstance(risk.estimate, Gap):
-        return 0.0, 1.0
+    """The limits of a risk, cut to what a risk can be; where the formula gives no width it may be any."""
     if not isinstance(risk.interval, Interval):
-        return risk.estimate, risk.estimate
+        return 0.0, 1.0
     return max(0.0, risk.interval.low), min(1.0, risk.interval.high)
 
 

@@ -8,7 +8,8 @@ from PySide6.QtCore import Qt, Signal
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QVBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.grid import Grid
 from fourcount.face.grid_forms import GRID_FORMS
@@ -159,6 +160,16 @@ class AsPrinted(FieldsView):
         """The field of what the paper says, made if it is not there yet."""
         return self.rare.paper_field(outcome, choices, self._width_of_names())
 
+    def read_in_order(self, parts: list[QWidget]) -> list[QWidget]:
+        """What the paper says comes right after the table, as Tab goes: the links are seldom needed."""
+        rare = self._rare
+        if rare is None or rare.check is None or rare.check.paper.parentWidget() is not rare.check:
+            return parts
+        moved = [part for part in (rare.check, rare.row_links) if part is not None]
+        rest = [part for part in parts if part not in moved]
+        after = rest.index(self.notes) + 1
+        return [*rest[:after], *moved, *rest[after:]]
+
     def _width_of_names(self) -> int:
         return max(words.sizeHint().width() for words in self._names.values())
 
@@ -176,8 +187,9 @@ class AsPrinted(FieldsView):
             from fourcount.wording.gaps import mark_text
 
             reasons = {mark.field: mark_text(mark) for mark in findings.marks}
-        told = [field.field for field in self.grid.fields]
-        for field in self.grid.fields:
+        marked = (*self.grid.fields, self.span)
+        told = [field.field for field in marked]
+        for field in marked:
             field.show_mark(reasons.get(field.field, ""))
         told += self._rare.show_marks(reasons) if self._rare else []
         self.notes.show_words("\n".join(dict.fromkeys(text for field, text in reasons.items() if field in told)))
@@ -188,8 +200,10 @@ class AsPrinted(FieldsView):
         self._form_rows.setColumnStretch(1, 1)
         names = ("design", "name_text", "left_words_text", "span_text", "form")
         self._names = {name: Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False) for name in names}
-        for row, words in enumerate(self._names.values()):
+        fields = (self.design, self.name, self.event_words, self.span, self.form)
+        for row, (words, field) in enumerate(zip(self._names.values(), fields, strict=True)):
             self._form_rows.addWidget(words, row, 0)
+            words.name_of(field)
         self._form_rows.addWidget(self.design, 0, 1, 1, 2)
         self._form_rows.addWidget(self.name, 1, 1)
         self._form_rows.addWidget(self.welcome, 1, 2)

@@ -8,7 +8,8 @@ from PySide6.QtCore import QObject, Qt
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QWidget
 
-from fourcount.face.fields import ChoiceField, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import TextField
 from fourcount.record.outcome import CELLS
 
 if TYPE_CHECKING:
@@ -42,10 +43,6 @@ class CursorKeeper(QObject):
     def to_baseline(self) -> None:
         """Go to the starting risk, however it is given."""
         self._go_to(self._window.patient.first_field)
-
-    def to_outcome(self) -> None:
-        """Go to the name of an outcome that begins."""
-        self._go_to(self._window.printed.name)
 
     def to_own_line(self) -> None:
         """Go to the reader's own line, drawn anew where there was none."""

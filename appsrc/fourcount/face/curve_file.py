@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import math
 from datetime import date
 from pathlib import Path
 from typing import TYPE_CHECKING
@@ -11,34 +10,27 @@ from PySide6.QtCore import QIODevice, QSaveFile
 from PySide6.QtWidgets import QFileDialog, QWidget
 
 from fourcount import __version__
-from fourcount.ink.curve_layout import Sheet
+from fourcount.ink.curve_sheet import Sheet
 from fourcount.record.entry.digits import specimen
 from fourcount.wording import curve_labels as labels
-from fourcount.wording.cautions import SAID_OF_THE_PATIENT, caution_text
 from fourcount.wording.exports import PICTURE_FOOT
 from fourcount.wording.standing import STANDING
 
 if TYPE_CHECKING:
-    from fourcount.appraisal.findings import OutcomeFindings
     from fourcount.ink.curve import Format
-    from fourcount.wording.curve import CurveWords
 
-WIDTH, HEIGHT = 760, 540
-"""Of a page without what stands under its curve."""
+WIDTH, HEIGHT = 760, 490
+"""Of a page without the texts above and under its curve, for which it grows."""
 
-CHARACTERS, LINE = 105, 15
-"""How many of them go into a line under the curve, and how high one is, rather too few and too high."""
+NO_REASON = ("", "unknown error")
 
 FORMATS: dict[str, Format] = {".png": "png", ".svg": "svg", ".pdf": "pdf"}
 
 
-def sheet_of(findings: OutcomeFindings, words: CurveWords, family: str) -> Sheet:
-    """A page for a file, as high as what stands on it asks for."""
-    told = [caution_text(caution) for caution in findings.cautions if caution.key not in SAID_OF_THE_PATIENT]
+def sheet_of(told: tuple[str, ...], family: str) -> Sheet:
+    """A page for a file, with the cautions that hold of its curve."""
     last = PICTURE_FOOT.format(standing=STANDING, version=__version__, date=date.today().isoformat())
-    foot = (*told, last)
-    lines = sum(math.ceil(len(text) / CHARACTERS) for text in (words.sentence, " ".join(words.notes), *foot))
-    return Sheet(WIDTH, HEIGHT + LINE * lines, ratio=2.0, family=family, foot=foot)
+    return Sheet(WIDTH, HEIGHT, ratio=2.0, family=family, foot=(*told, last))
 
 
 def format_of(path: str) -> Format | None:
@@ -62,6 +54,8 @@ def write(path: str, data: bytes) -> str:
     if file.open(QIODevice.OpenModeFlag.WriteOnly) and file.write(data) == len(data) and file.commit():
         return labels.SAVED.format(name=target.name)
     reason = file.errorString().rstrip(".").lower()
+    if reason in NO_REASON:  # a write that stopped in its middle leaves none
+        reason = labels.NO_ROOM
     return labels.NOT_SAVED.format(folder=specimen(str(target.parent)), reason=reason)
 
 

@@ -10,11 +10,11 @@ from PySide6.QtWidgets import QAbstractItemView, QHeaderView, QSizePolicy, QTabl
 
 from fourcount.face.look import Look
 from fourcount.face.scroll_bar import ScrollBar
+from fourcount.ink.curve_sheet import LEAST
 from fourcount.wording import curve_labels as labels
-from fourcount.wording.curve import CurveRow
+from fourcount.wording.curve_table import CurveRow
 
-LEAST = QSize(360, 240)
-"""Pixels at 100% text below which the drawing does not go."""
+ROW_GAP, HEAD_MARGIN = 4, 12
 
 
 class CurveCanvas(QWidget):
@@ -47,7 +47,7 @@ class CurveCanvas(QWidget):
         return self.minimumSizeHint()
 
     def minimumSizeHint(self) -> QSize:
-        return QSize(self._look.px(LEAST.width()), self._look.px(LEAST.height()))
+        return QSize(*(self._look.px(length) for length in LEAST))
 
     def resizeEvent(self, event: QResizeEvent) -> None:
         super().resizeEvent(event)
@@ -109,6 +109,7 @@ class CurveTable(QTableWidget):
         self.setColumnCount(1 + len(head.cells))
         self.setHorizontalHeaderLabels([head.start, *head.cells])
         self.setRowCount(len(rows))
+        self.setVerticalHeaderLabels([row.start for row in rows])  # told with each cell of the row
         for place, row in enumerate(rows):
             for column, text in enumerate((row.start, *row.cells)):
                 self.setItem(place, column, QTableWidgetItem(text))
@@ -119,8 +120,23 @@ class CurveTable(QTableWidget):
         for widget in (self, self.horizontalHeader()):
             widget.setFont(self._look.font("body"))
         self.resizeRowsToContents()
+        for place in range(self.rowCount()):
+            self.setRowHeight(place, self.rowHeight(place) + self._look.px(ROW_GAP))
         rows = sum(self.rowHeight(place) for place in range(self.rowCount()))
-        self.setFixedHeight(self.horizontalHeader().sizeHint().height() + rows + self._look.px(4))
+        self.horizontalHeader().setFixedHeight(self._head_height())
+        self.setFixedHeight(self._head_height() + rows + self._look.px(4))
+
+    def _head_height(self) -> int:
+        """That of the longest head in its column; Qt's own hint counts one line."""
+        heads = [self.horizontalHeaderItem(column) for column in range(self.columnCount())]
+        metrics, room = self.horizontalHeader().fontMetrics(), self._look.px(HEAD_MARGIN)
+        flags = Qt.AlignmentFlag.AlignLeft.value | Qt.TextFlag.TextWordWrap.value
+        tall = [
+            metrics.boundingRect(0, 0, self.columnWidth(column) - room, 0, flags, head.text()).height()
+            for column, head in enumerate(heads)
+            if head is not None
+        ]
+        return max(tall, default=0) + room
 
     def resizeEvent(self, event: QResizeEvent) -> None:
         super().resizeEvent(event)

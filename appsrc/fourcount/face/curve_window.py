@@ -14,20 +14,22 @@ from fourcount.appraisal.curve import curve, highest_start
 from fourcount.appraisal.findings.curve import Curve
 from fourcount.face import curve_file
 from fourcount.face.buttons import Button
+from fourcount.face.choice_field import ChoiceField
 from fourcount.face.curve_parts import CurveCanvas, CurveTable
 from fourcount.face.curve_worker import CurveWorker
-from fourcount.face.fields import ChoiceField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.links import Link
 from fourcount.face.look import family_in_use
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.face.text import Words
 from fourcount.ink.curve import draw_curve
-from fourcount.ink.curve_layout import Sheet
+from fourcount.ink.curve_sheet import Sheet
 from fourcount.ink.palette import PAPER, Palette
 from fourcount.picture.curve_axes import even_marks, reach_for
 from fourcount.wording import curve_labels as labels
-from fourcount.wording.curve import CurveWords, View, curve_head, curve_rows, curve_words, views
+from fourcount.wording.curve import CurveWords, View, curve_words, views
+from fourcount.wording.curve_cautions import curve_cautions
+from fourcount.wording.curve_table import curve_head, curve_rows
 
 if TYPE_CHECKING:
     from fourcount.face.window import MainWindow
@@ -173,8 +175,7 @@ class CurveWindow(QDialog):
         self.view.show_choice(key)
         view = self._views.get(key, View())
         words = curve_words(self._session.record, outcome, findings, found, view)
-        said = " ".join((words.sentence, *words.notes)).strip()
-        self.canvas.show_words(words.title, said)
+        self.canvas.show_words(words.title, words.described)
         self.sentence.show_words(words.sentence)
         self.notes.show_words(" ".join(words.notes))
         self.table.show_rows(curve_head(outcome, found, view), curve_rows(found, view, even_marks(found.reach)))
@@ -200,7 +201,8 @@ class CurveWindow(QDialog):
         self._show_state()
         if self._now is None or not self._views or self._session.findings is None:
             return None
-        sheet = curve_file.sheet_of(self._session.findings, self._now.words, family_in_use())
+        told = curve_cautions(self._session.findings, self._now.curve, self._now.view)
+        sheet = curve_file.sheet_of(told, family_in_use())
         return self._now._replace(palette=PAPER, sheet=sheet)
 
     # Slots

@@ -7,7 +7,8 @@ from typing import TYPE_CHECKING
 from PySide6.QtCore import Signal
 from PySide6.QtWidgets import QGridLayout, QVBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.look import Look
 from fourcount.face.text import Words
 from fourcount.record.outcome import Outcome
@@ -80,6 +81,7 @@ class ForOnePatient(FieldsView):
         self.names["starting_risk_text"].hide()
         self.figures = Figures(self._look, actions, menu)
         self.figures.hide()
+        self.figures.moved.connect(self._chain)
         self.figures.odds_wanted.connect(self._on_odds)
         rows = QVBoxLayout()
         self._column.insertLayout(2, rows)
@@ -118,7 +120,7 @@ class ForOnePatient(FieldsView):
         if not self._awake:
             self.baseline.show_text(outcome.patient.starting_risk_text)
             return
-        self.start.show_state(outcome.patient)
+        self.start.show_state(outcome)
         if findings is not None:
             self._show_findings(outcome, findings, record.choices)
 
@@ -159,7 +161,7 @@ class ForOnePatient(FieldsView):
         self.quiet.setVisible(not view.waits)
         self.quiet.show_state(outcome, self._fields.columnMinimumWidth(0))
         self.figures.show_view(view)
-        self.figures.setVisible(not view.waits)
+        self.figures.setVisible(not view.waits or view.to_odds)
 
     def _build(self) -> None:
         self._fields = QGridLayout()
@@ -167,8 +169,11 @@ class ForOnePatient(FieldsView):
         self._fields.setColumnStretch(1, 1)
         names = ("starting_risk_text", "starting_risk_source_text", "effect")
         self.names = {name: Words(self._look, "body", "muted", labels.FIELDS[name], wraps=False) for name in names}
-        for row, words in enumerate(self.names.values()):
+        for row, (words, field) in enumerate(
+            zip(self.names.values(), (self.baseline, self.source, self.effect), strict=True)
+        ):
             self._fields.addWidget(words, row, 0)
+            words.name_of(field)
         self._start_area = QGridLayout()
         self._start_area.addWidget(self.baseline, 1, 0)
         self._fields.addLayout(self._start_area, 0, 1)

@@ -56,7 +56,7 @@ class Grid(FieldsView):
         self.total_heading = self._small()
         self.total_heading.setText(labels.TOTAL)
         self.totals = {key: self._small(RIGHT) for key in ("first", "second", "left", "right", "everyone")}
-        for widget in self._widgets():
+        for widget in (*self.fields, *self._small_words()):
             widget.setParent(self)  # a form may leave some out
         self._layout = QGridLayout(self)
         self._layout.setContentsMargins(0, 0, 0, 0)
@@ -74,8 +74,8 @@ class Grid(FieldsView):
         if form not in GRID_FORMS:
             return
         self._arrange("down" if form == "pairs" else outcome.layout, form)
-        for field, cell in (*self.cells.items(), *self._rare.items()):
-            cell.show_text(getattr(outcome.table, field, ""))
+        for name, cell in (*self.cells.items(), *self._rare.items()):
+            cell.show_text(getattr(outcome.table, name, ""))
         for position, label in self.labels.items():
             label.show_text(getattr(outcome, f"{position}_label_text"))
         for column, heading in self.headings.items():
@@ -84,6 +84,10 @@ class Grid(FieldsView):
         self._show_roles(outcome)
         self._show_names(outcome, GRID_FORMS[form])
         self._show_totals(findings, GRID_FORMS[form])
+        self._show_rest(outcome, findings, form)
+
+    def _show_rest(self, outcome: Outcome, findings: OutcomeFindings | None, form: Form) -> None:
+        """What some forms have besides; the names of the sums."""
         if form == "pairs":
             from fourcount.face.printed.pair_grid import show_pairs
 
@@ -92,6 +96,18 @@ class Grid(FieldsView):
             from fourcount.face.printed.percent_grid import show_counts
 
             show_counts(self, findings)
+        for word in self._small_words():
+            word.setVisible(bool(word.text()) and self._layout.indexOf(word) >= 0)
+        if findings:  # the first paint needs no names
+            from fourcount.face.grid_names import name_totals
+
+            name_totals(self, GRID_FORMS[form], form)
+
+    def read_in_order(self, parts: list[QWidget]) -> list[QWidget]:
+        """Names first, then the counts line by line with what stands beside them, as Tab goes."""
+        names = (*self.headings.items(), *self._rare.items(), *self.labels.items())
+        first = [part for key, field in names for part in (field, self.roles.get(key)) if part in parts]
+        return [*first, *(part for part in parts if part not in first)]
 
     def note(self, field: str) -> QLabel:
         """The small line under a cell."""
@@ -181,7 +197,7 @@ class Grid(FieldsView):
         for column, stretch in enumerate(kind.stretches if layout == "down" else ACROSS):
             self._layout.setColumnStretch(column, stretch)
         self._set_alignment(layout)
-        for widget in self._widgets():
+        for widget in self.fields:
             widget.setVisible(self._layout.indexOf(widget) >= 0)
         for made in self._rare.values():
             if self._layout.indexOf(made) >= 0:
@@ -228,9 +244,10 @@ class Grid(FieldsView):
             self._rare[field] = made
         return self._rare[field]
 
-    def _widgets(self) -> tuple[QWidget, ...]:
+    def _small_words(self) -> tuple[QLabel, ...]:
+        """All that is only read; what is empty keeps its room and is not there for a screen reader."""
         return (
-            *self.fields, *self.roles.values(), self.total_heading, *self.totals.values(), *self.notes.values(),
+            *self.roles.values(), self.total_heading, *self.totals.values(), *self.notes.values(),
             *self.row_heads.values(),
         )  # fmt: skip
 
@@ -269,6 +286,9 @@ class Grid(FieldsView):
         label = QLabel()
         label.setAlignment(alignment)
         label.setTextFormat(Qt.TextFormat.PlainText)
+        policy = label.sizePolicy()
+        policy.setRetainSizeWhenHidden(True)
+        label.setSizePolicy(policy)
         return label
 
     def _connect_all(self) -> None:

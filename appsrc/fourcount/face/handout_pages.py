@@ -9,10 +9,12 @@ from fourcount import __version__
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import OutcomeFindings
 from fourcount.ink.handout import PAPERS, Handout, NoPage, compose
+from fourcount.picture.options import USUAL
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
 from fourcount.wording import handout_labels as labels
 from fourcount.wording import names
+from fourcount.wording.handout import why_no_page
 from fourcount.wording.plain_refusal import why_not
 
 
@@ -35,7 +37,11 @@ def candidates(record: Record) -> tuple[Candidate, ...]:
     return tuple(found)
 
 
-def page_of(record: Record, outcomes: tuple[Candidate, ...], paper: str) -> Handout | NoPage:
-    """The page of the outcomes that are ticked and ready; a sentence where there is none."""
-    named = [(one.outcome, one.findings) for one in outcomes if one.outcome.on_handout and not one.why]
-    return compose(record, named, PAPERS[paper], __version__, date.today())
+def page_of(record: Record, outcomes: tuple[Candidate, ...], paper: str, ranged: bool = False) -> Handout | NoPage:
+    """The page of the outcomes that are ticked and ready, with their ranges if asked for; a sentence without one."""
+    ticked = [one for one in outcomes if one.outcome.on_handout]
+    named = [(one.outcome, one.findings) for one in ticked if not one.why]
+    if ticked and not named:
+        return NoPage(why_no_page([one.why for one in ticked]))
+    options = USUAL._replace(uncertainty=ranged)
+    return compose(record, named, PAPERS[paper], __version__, date.today(), options)

@@ -1,4 +1,4 @@
-"""A box to tick, as large as the text beside it and drawn in the palette: one outcome for the page."""
+"""A box to tick, as large as the text beside it and drawn in the palette: one outcome, or the range, for the page."""
 
 from __future__ import annotations
 
@@ -15,10 +15,11 @@ BOX, GAP, HEIGHT = 16, 8, 28
 
 
 class Tick(QCheckBox):
-    """One outcome of the record; one that is not ready cannot be ticked, and says why."""
+    """One outcome of the record, at its ``place``; one that is not ready cannot be ticked, and says why."""
 
-    def __init__(self, look: Look, place: int) -> None:
-        super().__init__()
+    def __init__(self, look: Look, place: int = -1, words: str = "") -> None:
+        super().__init__(words)
+        self.setAccessibleName(words)
         self.place = place
         self._look = look
         self.setCursor(Qt.CursorShape.PointingHandCursor)

@@ -7,31 +7,27 @@ from pathlib import Path
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer
-from PySide6.QtGui import QAction, QImage, QKeySequence, QPainter, QPaintEvent, QPen, QResizeEvent
+from PySide6.QtGui import QAction, QKeySequence, QResizeEvent
 from PySide6.QtWidgets import QDialog, QHBoxLayout, QScrollArea, QVBoxLayout, QWidget
 
 from fourcount.face import handout_dialogs
 from fourcount.face.buttons import Button
-from fourcount.face.fields import ChoiceField
+from fourcount.face.choice_field import ChoiceField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.handout_pages import Candidate, candidates, page_of
+from fourcount.face.handout_preview import Preview
 from fourcount.face.handout_print import print_page
 from fourcount.face.handout_tick import LONGEST_NAME, Tick
 from fourcount.face.page_file import write_page
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.face.text import Words
 from fourcount.ink.handout import Handout, NoPage
-from fourcount.ink.handout_file import page_image
 from fourcount.record import editing
 from fourcount.wording import handout as words
 from fourcount.wording import handout_labels as labels
 
 if TYPE_CHECKING:
-    from fourcount.face.look import Look
     from fourcount.face.window import MainWindow
-
-PREVIEW_DOTS = 200
-"""The preview is drawn this fine and made smaller, so that it shows what paper will show."""
 
 PAUSE = 250
 """Milliseconds after the last change of the record before the page is made anew."""
@@ -56,49 +52,6 @@ def open_handout(window: MainWindow) -> HandoutWindow | None:
     return handout
 
 
-class Preview(QWidget):
-    """The page as one object: a picture of it, and all that it says as its description."""
-
-    def __init__(self, look: Look) -> None:
-        super().__init__()
-        self._look = look
-        self._fine = QImage()
-        self._shown = QImage()
-        self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
-        self.setAccessibleName(labels.PREVIEW_NAME)
-
-    def show_page(self, page: Handout | NoPage) -> None:
-        """Show a page, or nothing where there is none."""
-        drawn = isinstance(page, Handout)
-        self._fine = page_image(page, PREVIEW_DOTS) if isinstance(page, Handout) else QImage()
-        self.setAccessibleDescription(page.words.description if isinstance(page, Handout) else page.sentence)
-        self.setVisible(drawn)
-        self._shown = QImage()
-        self.fit(self.width())
-
-    def fit(self, width: int) -> None:
-        """Be as wide as there is room, and as high as the page is then."""
-        if not self._fine.isNull():
-            self.setFixedSize(width, round(width * self._fine.height() / self._fine.width()))
-        self.update()
-
-    def paintEvent(self, event: QPaintEvent) -> None:
-        if self._fine.isNull():
-            return
-        ratio = self.devicePixelRatioF()
-        wanted = self.size() * ratio
-        if self._shown.size() != wanted:
-            smooth = Qt.TransformationMode.SmoothTransformation
-            self._shown = self._fine.scaled(wanted, Qt.AspectRatioMode.IgnoreAspectRatio, smooth)
-            self._shown.setDevicePixelRatio(ratio)
-        painter = QPainter(self)
-        painter.drawImage(0, 0, self._shown)
-        focused = self.hasFocus()
-        painter.setPen(QPen(self._look.colour("accent" if focused else "hairline"), 2 if focused else 1))
-        painter.drawRect(self.rect().adjusted(0, 0, -1, -1))
-        painter.end()
-
-
 class HandoutWindow(QDialog):
     """Follows the record while it is open; ticking an outcome is a step that can be undone like any other."""
 
@@ -114,6 +67,7 @@ class HandoutWindow(QDialog):
         self.heading = Words(self._look, "strong", text=labels.OUTCOMES_NAME)
         self.notes = Words(self._look, "small", "muted")
         self.paper = ChoiceField(self._look, labels.PAPER_NAME, tuple(labels.PAPERS.items()), labels.PAPER_PREFIX)
+        self.range = Tick(self._look, words=labels.SHOW_RANGE)
         self.notice = Words(self._look, selectable=True)
         self.save_action = self._action(labels.SAVE, QKeySequence.StandardKey.Save)
         self.print_action = self._action(labels.PRINT, QKeySequence.StandardKey.Print)
@@ -126,6 +80,7 @@ class HandoutWindow(QDialog):
         self.save_action.triggered.connect(self._on_save)
         self.print_action.triggered.connect(self._on_print)
         self.close_action.triggered.connect(self.close)
+        self.range.clicked.connect(self._show_page)
         self.paper.chosen.connect(self._show_page)
         self._session.changed.connect(self._on_changed)
         self._look.changed.connect(self._on_look_changed)
@@ -152,6 +107,7 @@ class HandoutWindow(QDialog):
         self._list = QVBoxLayout()
         self._column.addLayout(self._list)
         self._column.addWidget(self.notes)
+        self._column.addWidget(self.range)
         self._column.addWidget(self.paper)
         self._column.addWidget(self.notice)
         buttons = FlowLayout(self._look, gap=8)
@@ -169,7 +125,7 @@ class HandoutWindow(QDialog):
         side.setVerticalScrollBar(ScrollBar(self._look))
         side.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
         self._side = side
-        row = QHBoxLayout(self)
+        self._row = row = QHBoxLayout(self)
         row.setContentsMargins(0, 0, 0, 0)
         row.addWidget(self._scroll, 1)
         row.addWidget(side)
@@ -188,7 +144,7 @@ class HandoutWindow(QDialog):
         record = self._session.record
         found = candidates(record)
         self._show_ticks(found)
-        self._page = page_of(record, found, str(self.paper.currentData()))
+        self._page = page_of(record, found, str(self.paper.currentData()), self.range.isChecked())
         self.preview.show_page(self._page)
         self._fit()
         self.notice.show_words(self._page.sentence if isinstance(self._page, NoPage) else "")
@@ -207,7 +163,7 @@ class HandoutWindow(QDialog):
             tick.clicked.connect(self._on_ticked)
             self._list.addWidget(tick)
             self._ticks.append(tick)
-        order = [*self._ticks, self.paper, self.save, self.print, self.preview]
+        order = [*self._ticks, self.range, self.paper, self.save, self.print, self.preview]
         for before, after in pairwise(order):
             self.setTabOrder(before, after)
         for tick, one in zip(self._ticks, found, strict=True):
@@ -243,9 +199,9 @@ class HandoutWindow(QDialog):
             self._show_page()
         if not isinstance(self._page, Handout):
             return
-        taken = print_page(self, self._page)
-        if taken is not None:
-            self.notice.show_words(labels.PRINTED if taken else labels.NOT_PRINTED)
+        sentence = print_page(self, self._page)
+        if sentence:
+            self.notice.show_words(sentence)
 
     # Qt's own
 
@@ -267,3 +223,5 @@ class HandoutWindow(QDialog):
         self._column.setSpacing(px(12))
         self._list.setSpacing(px(4))
         self.setPalette(self._look.qt_palette())
+        self._row.activate()
+        self._fit()

@@ -49,12 +49,12 @@ class Header(FieldsView):
             look, "title_text", labels.FIELDS["title_text"], labels.HINTS["title_text"], role="strong"
         )
         self.source = QuietField(look, "source_text", labels.FIELDS["source_text"], labels.HINTS["source_text"])
-        self.notice = Words(look, "body", "ink", " ", wraps=False)
+        self.notice = Words(look, "body", "ink", wraps=False)
         self._timer = QTimer(self)
         self._timer.setSingleShot(True)
         self._timer.setInterval(NOTICE_STAYS)
         self._timer.timeout.connect(self._on_notice_over)
-        self.notice.setSizePolicy(QSizePolicy.Policy.Ignored, QSizePolicy.Policy.Preferred)
+        self._keep_room(True)
         self.notice.setAlignment(Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter)
         self.bar: OutcomesBar | None = None
         self._narrow = False
@@ -88,7 +88,7 @@ class Header(FieldsView):
     def _say(self, notice: str) -> None:
         self.notice.setText(notice)
         self.notice.setAccessibleName(notice)
-        self.notice.setVisible(bool(notice) or not self._narrow)
+        self.notice.setVisible(bool(notice))
         self._make_room(self.notice.sizeHint().width() if notice else 0)
 
     def _make_room(self, needed: int) -> None:
@@ -112,9 +112,16 @@ class Header(FieldsView):
             self._narrow = narrow
             ways = QBoxLayout.Direction
             self._row.setDirection(ways.TopToBottom if narrow else ways.LeftToRight)
+            self._keep_room(not narrow)
             self._align_bar()
             self._on_look_changed()
             self._say(self.notice.text())
+
+    def _keep_room(self, kept: bool) -> None:
+        """Whether the room of a notice is kept while there is none."""
+        policy = QSizePolicy(QSizePolicy.Policy.Ignored, QSizePolicy.Policy.Preferred)
+        policy.setRetainSizeWhenHidden(kept)
+        self.notice.setSizePolicy(policy)
 
     def _align_bar(self) -> None:
         """At the right end, or at the left where everything stands under each other."""

@@ -26,6 +26,7 @@ class Link(QAbstractButton):
             self.clicked.connect(action.trigger)
             self._shortcut = action.shortcut().toString(action.shortcut().SequenceFormat.NativeText)
             self.setToolTip(tip(f"{name or words}  {self._shortcut}".strip()))
+            self.setAccessibleDescription(self._shortcut)
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 

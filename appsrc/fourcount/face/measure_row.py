@@ -15,6 +15,7 @@ from fourcount.ink.typeset import CENTRE, LEFT, RIGHT, draw_text, text_height, t
 from fourcount.picture.scales import Scale
 from fourcount.wording.lines import MeasureLine
 from fourcount.wording.numbers import INFINITY
+from fourcount.wording.printed_labels import OPENED
 
 ONE_LINE_FROM = 430
 """Below this width (at 100% text) estimate and interval stand under the name."""
@@ -117,7 +118,8 @@ class MeasureRow(QAbstractButton):
         values = line.withheld or ", ".join(part for part in (line.estimate, line.interval) if part)
         name = line.name.replace("\n", ", ")
         self.setAccessibleName(f"{name}: {values}" if values else name)
-        self.setAccessibleDescription(" ".join(part for part in (line.detail, line.note) if part))
+        opened = OPENED if is_open else ""
+        self.setAccessibleDescription("; ".join(part for part in (line.detail, line.note, opened) if part))
 
     def hasHeightForWidth(self) -> bool:
         return True

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from PySide6.QtCore import QPoint, QRect, QSize, Qt, Signal
 from PySide6.QtGui import QAction, QContextMenuEvent, QMouseEvent, QPainter, QPaintEvent, QPen
-from PySide6.QtWidgets import QApplication, QHBoxLayout, QMenu, QSizePolicy, QTabBar, QWidget
+from PySide6.QtWidgets import QApplication, QHBoxLayout, QMenu, QSizePolicy, QTabBar, QToolButton, QWidget
 
 from fourcount.face.links import Link
 from fourcount.face.look import Look
@@ -48,6 +48,8 @@ class OutcomeTabs(QTabBar):
         self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
         self.setSizePolicy(QSizePolicy.Policy.Maximum, QSizePolicy.Policy.Fixed)
         self.setAccessibleName(OUTCOMES)
+        for arrow in self.findChildren(QToolButton):
+            arrow.setFocusPolicy(Qt.FocusPolicy.NoFocus)  # the keys go through the tabs themselves
         self.currentChanged.connect(self._on_current_changed)
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()

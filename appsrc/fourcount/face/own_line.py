@@ -7,7 +7,8 @@ from typing import TYPE_CHECKING
 from PySide6.QtCore import Signal
 from PySide6.QtWidgets import QHBoxLayout, QVBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.look import Look
 from fourcount.face.printed.quiet_link import QuietLink

@@ -11,6 +11,8 @@ from fourcount.ink.handout_file import writer_for
 from fourcount.record.entry.digits import specimen
 from fourcount.wording import handout_labels as labels
 
+NO_REASON = ("", "unknown error")
+
 
 def write_page(page: Handout, path: str) -> str:
     """Write the page as the kind of file that its name asks for; "" if all went well, else one sentence.
@@ -32,4 +34,6 @@ def write_page(page: Handout, path: str) -> str:
 
 def _not_saved(target: Path, file: QSaveFile) -> str:
     reason = file.errorString().rstrip(".").lower()
+    if reason in NO_REASON:  # a write that stopped in its middle leaves none
+        reason = labels.NO_ROOM
     return labels.NOT_SAVED.format(folder=specimen(str(target.parent)), reason=reason)

@@ -2,10 +2,10 @@
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, NamedTuple
 
-from PySide6.QtCore import QEvent, QSize, Qt
-from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent, QPen, QResizeEvent
+from PySide6.QtCore import QEvent, QObject, QSize, Qt
+from PySide6.QtGui import QKeyEvent, QResizeEvent
 from PySide6.QtWidgets import QBoxLayout, QScrollArea, QVBoxLayout, QWidget
 
 from fourcount.appraisal.appraise import appraise
@@ -13,9 +13,9 @@ from fourcount.face.flow import FlowLayout
 from fourcount.face.header import Hairline
 from fourcount.face.links import Link
 from fourcount.face.on_white import OnWhite
+from fourcount.face.patient_canvas import Canvas, Scroll
 from fourcount.face.scroll_bar import ScrollBar
 from fourcount.face.text import Words
-from fourcount.ink.patient_page import PatientPage
 from fourcount.ink.plain_picture import Shown, shown
 from fourcount.wording import plain_texts
 from fourcount.wording.plain_refusal import why_not as why_no_screen
@@ -23,12 +23,14 @@ from fourcount.wording.plain_refusal import why_not as why_no_screen
 if TYPE_CHECKING:
     from fourcount.face.window import MainWindow
     from fourcount.picture.options import PictureOptions
-    from fourcount.record.paper import Record
+    from fourcount.record.outcome import Outcome
+    from fourcount.record.paper import Choices, Record
 
 __all__ = ["PatientScreen", "open_screen", "why_no_screen"]
 
 FORWARD = (Qt.Key.Key_Right, Qt.Key.Key_PageDown, Qt.Key.Key_N)
 BACKWARD = (Qt.Key.Key_Left, Qt.Key.Key_PageUp, Qt.Key.Key_B)
+ARROWS = (Qt.Key.Key_Left, Qt.Key.Key_Right, Qt.Key.Key_Up, Qt.Key.Key_Down)
 FOOT_MARGIN = 45
 LINK_GAP = 18
 
@@ -37,75 +39,31 @@ def open_screen(window: MainWindow) -> PatientScreen | None:
     """Show the outcome in view to the patient; a sentence in the window, and None, where something is missing."""
     session = window.session
     session.settle()
-    why = why_no_screen(session.outcome, appraise(session.outcome, session.record.choices))
+    why = why_of(session.outcome, session.record.choices)
     if why:
         window.banner.tell(why)
         return None
     window.banner.hide()
-    screen = PatientScreen(window)
+    screen = next((one for one in window.findChildren(PatientScreen) if one.isVisible()), None) or PatientScreen(window)
+    screen.go_to(session.view)
     screen.showFullScreen()
+    screen.raise_()
     screen.activateWindow()
     screen.canvas.setFocus(Qt.FocusReason.OtherFocusReason)
     return screen
 
 
-class Canvas(QWidget):
-    """The page as one object: painted, and described in full sentences."""
+class Ready(NamedTuple):
+    """Whether an outcome has all that a page needs; held with what that was found of, so that ids stay theirs."""
 
-    def __init__(self, look: OnWhite) -> None:
-        super().__init__()
-        self._look = look
-        self._page: PatientPage | None = None
-        self._room = QSize()
-        self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
-        look.changed.connect(self._fit)
-
-    def show_page(self, it: Shown) -> None:
-        """Show another outcome."""
-        self._page = PatientPage(it)
-        self.setAccessibleName(it.words.title)
-        self.setAccessibleDescription(it.words.sentence)
-        self._fit()
-
-    def take_room(self, room: QSize) -> None:
-        """Fill the room that there is; what needs more can be scrolled to."""
-        if room != self._room:
-            self._room = room
-            self._fit()
-
-    def _fit(self) -> None:
-        if self._page is not None and not self._room.isEmpty():
-            style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
-            tall = max(float(self._room.height()), self._page.least_height(style, self._room.width()))
-            self.setFixedSize(self._room.width(), round(tall))
-        self.update()
-
-    def paintEvent(self, event: QPaintEvent) -> None:
-        if self._page is None or self._room.isEmpty():
-            return
-        painter = QPainter(self)
-        painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-        style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
-        self._page.draw(painter, style, self.width(), self.height())
-        if self.hasFocus() and self.height() > self._room.height():
-            painter.setPen(QPen(self._look.colour("accent"), 2))
-            painter.drawRect(self.rect().adjusted(1, 1, -1, -1))
-        painter.end()
-
-    def focusInEvent(self, event: QFocusEvent) -> None:
-        super().focusInEvent(event)
-        self.update()
-
-    def focusOutEvent(self, event: QFocusEvent) -> None:
-        super().focusOutEvent(event)
-        self.update()
+    outcome: Outcome
+    choices: Choices
+    is_so: bool
 
 
-class Scroll(QScrollArea):
-    """A scroll area that leaves every key to the screen: arrows to the side are outcomes here."""
-
-    def keyPressEvent(self, event: QKeyEvent) -> None:
-        event.ignore()
+def why_of(outcome: Outcome, choices: Choices) -> str:
+    """Why an outcome of a record cannot be shown; "" where it can."""
+    return why_no_screen(outcome, appraise(outcome, choices))
 
 
 class PatientScreen(QWidget):
@@ -120,6 +78,8 @@ class PatientScreen(QWidget):
         self._range = False
         self._place = 0
         self._pages: list[int] = []
+        self._ready: dict[tuple[int, int], Ready] = {}
+        self._outcome: Outcome | None = None
         self.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose)
         self.setWindowTitle(plain_texts.SCREEN_TITLE)
         self.setAutoFillBackground(True)
@@ -138,6 +98,7 @@ class PatientScreen(QWidget):
         self.leave.clicked.connect(self.close)
         self._look.changed.connect(self._on_look_changed)
         self._session.changed.connect(self._on_changed)
+        self._count = len(self._session.record.outcomes)
         self._take_pages()
         self.go_to(self._session.view)
 
@@ -168,6 +129,8 @@ class PatientScreen(QWidget):
             (self.range, self.leave),
         ):
             self.setTabOrder(before, after)
+        for link in (self.back, self.next, self.range, self.leave):
+            link.installEventFilter(self)
         self._on_look_changed()
 
     @property
@@ -181,8 +144,16 @@ class PatientScreen(QWidget):
         self._show()
 
     def _take_pages(self) -> None:
-        """The outcomes that have all they need: a patient is led past the others."""
-        self._pages = [place for place in range(len(self._session.record.outcomes)) if self._shown(place)]
+        """The outcomes that have all they need: a patient is led past the others. Only changed ones are looked at."""
+        record, known = self._session.record, self._ready
+        self._ready = {}
+        for outcome in record.outcomes:
+            key = (id(outcome), id(record.choices))
+            before = known.get(key)
+            self._ready[key] = before or Ready(outcome, record.choices, not why_of(outcome, record.choices))
+        self._pages = [
+            place for place, outcome in enumerate(record.outcomes) if self._ready[id(outcome), id(record.choices)].is_so
+        ]
 
     def _shown(self, place: int) -> Shown | None:
         record: Record = self._session.record
@@ -194,6 +165,7 @@ class PatientScreen(QWidget):
         it = self._shown(self.outcome)
         if it is None:
             return
+        self._outcome = self._session.record.outcomes[self.outcome]
         self.canvas.show_page(it)
         self._scroll.verticalScrollBar().setValue(0)
         number, count = self._place + 1, len(self._pages)
@@ -214,6 +186,13 @@ class PatientScreen(QWidget):
             self._show()
 
     # Qt's own
+
+    def eventFilter(self, watched: QObject, event: QEvent) -> bool:
+        """Arrows turn pages whatever has the focus: buttons side by side would take them to move among themselves."""
+        if isinstance(event, QKeyEvent) and event.type() == QEvent.Type.KeyPress and event.key() in ARROWS:
+            self.keyPressEvent(event)
+            return True
+        return super().eventFilter(watched, event)
 
     def keyPressEvent(self, event: QKeyEvent) -> None:
         key, bar = event.key(), self._scroll.verticalScrollBar()
@@ -248,13 +227,17 @@ class PatientScreen(QWidget):
         ]
         wide = sum(widget.sizeHint().width() for widget in shown) + self._look.px(LINK_GAP) * len(shown)
         words = self.foot.fontMetrics().horizontalAdvance(self.foot.text())
-        beside = wide + words + self._look.px(2 * FOOT_MARGIN + LINK_GAP) <= self.width()
+        margins = 2 * max(self.canvas.margin, self._look.px(FOOT_MARGIN))
+        beside = wide + words + margins + self._look.px(LINK_GAP) <= self.width()
         ways = QBoxLayout.Direction
         self._foot_row.setDirection(ways.LeftToRight if beside else ways.TopToBottom)
         self._links.setMinimumWidth(wide if beside else 0)
         self._column.activate()
         room = self._scroll.size()
-        self.canvas.take_room(QSize(room.width() - self._scroll.verticalScrollBar().sizeHint().width(), room.height()))
+        bar = self._scroll.verticalScrollBar().sizeHint().width()
+        self.canvas.take_room(QSize(room.width() - bar, room.height()))
+        edge, above = self.canvas.margin or self._look.px(FOOT_MARGIN), self._look.px(10)
+        self._foot_row.setContentsMargins(edge, above, edge + bar, above)  # as the page above it
 
     # Slots
 
@@ -270,16 +253,27 @@ class PatientScreen(QWidget):
 
     def _on_changed(self) -> None:
         """Follow the record; where nothing of it can be shown any more, there is nothing to see."""
-        at = self.outcome if self._pages else 0
+        at = self._followed()
         self._take_pages()
         if self._pages:
             self.go_to(at)
         else:
             self.close()
 
+    def _followed(self) -> int:
+        """Where the outcome shown stands now: moved along; where it is gone, the window's is shown."""
+        outcomes, count = self._session.record.outcomes, self._count
+        self._count = len(outcomes)
+        at = self.outcome if self._pages else 0
+        if at < len(outcomes) and outcomes[at] is self._outcome:
+            return at
+        moved = next((place for place, outcome in enumerate(outcomes) if outcome is self._outcome), None)
+        if moved is not None:
+            return moved
+        return at if count == self._count else self._session.view
+
     def _on_look_changed(self) -> None:
         px = self._look.px
-        self._foot_row.setContentsMargins(px(FOOT_MARGIN), px(10), px(FOOT_MARGIN), px(10))
         self._foot_row.setSpacing(px(10))
         self.place.setFixedHeight(px(26))  # as high as the links beside it
         self._fit()

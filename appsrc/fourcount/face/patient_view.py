@@ -19,8 +19,8 @@ from fourcount.wording.form import lacking
 from fourcount.wording.gaps import gap_text, mark_text
 from fourcount.wording.names import effect_name, sentence_case
 from fourcount.wording.patient import WHICH_PEOPLE, patient_words
-from fourcount.wording.patient_labels import TABLE_CORNER, TABLE_ROW
-from fourcount.wording.patient_table import Row, patient_table, patient_table_head
+from fourcount.wording.patient_labels import TABLE_CORNER
+from fourcount.wording.patient_table import Row, patient_table, patient_table_head, rows_sentence
 from fourcount.wording.ranks import people_for_all
 
 
@@ -40,6 +40,7 @@ class PatientView(NamedTuple):
     summary: str = ""
     detail: str = ""
     rows: tuple[Row, ...] = ()
+    rows_head: Row | None = None
     rows_corner: str = ""
     rows_sentence: str = ""
     to_curve: bool = False
@@ -65,8 +66,9 @@ def patient_view(
         return view._replace(waits=labels.PATIENT_WAITS if counted else labels.PATIENT_WAITS_OTHERWISE)
     patient = findings.patient
     if isinstance(patient, Gap):
-        told = any(field in view.marks for field in PATIENT_MARKS)
-        return view if told else view._replace(waits=gap_text(patient))
+        if any(mark.field in PATIENT_MARKS and not mark.used for mark in findings.marks):
+            return view  # the mark's sentence says why
+        return view._replace(waits=gap_text(patient), to_odds=patient.key in SOLVED_BY_ODDS)
     return _with_patient(view, outcome, findings, patient, choices, options)
 
 
@@ -80,6 +82,9 @@ PATIENT_MARKS = (
     "other_span_text",
 )
 """The column's fields that can be marked; the sentences stand under them."""
+
+SOLVED_BY_ODDS = ("solved-beyond-one-odds", "solved-beyond-zero-odds")
+"""Why an overall risk gives nobody's, where the odds ratio would do it."""
 
 
 def _with_patient(
@@ -114,7 +119,7 @@ def _with_patient(
 def _passes(patient: PatientFindings) -> bool:
     """Whether the carried effect asks for more than 100%, at any of the starting risks."""
     told = [one for one in (patient, patient.low, patient.high) if isinstance(one, PatientFindings)]
-    return any(one.with_.estimate == Gap("beyond-one") for one in told)
+    return any(one.with_.estimate == Gap("beyond-one") and one.baseline < 1.0 for one in told)
 
 
 def _table(
@@ -125,15 +130,8 @@ def _table(
     if isinstance(patient.with_.estimate, Gap) and len(rows) == 1:
         return {}  # its reason stands above
     heads = patient_table_head(outcome, findings, choices, people)
-    said = (
-        TABLE_ROW.format(
-            label=row.label,
-            figures=", ".join(f"{head}: {cell}" for head, cell in zip(heads[1:], row[1:], strict=True) if cell),
-        )
-        for row in rows
-    )
     corner = TABLE_CORNER.format(people=numbers.whole(people_for_all(patient, people)))
-    return {"rows": tuple(rows), "rows_corner": corner, "rows_sentence": " ".join(said)}
+    return {"rows": tuple(rows), "rows_head": heads, "rows_corner": corner, "rows_sentence": rows_sentence(rows, heads)}
 
 
 def _own_risk(outcome: Outcome, findings: OutcomeFindings) -> bool:

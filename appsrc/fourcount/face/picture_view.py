@@ -1,14 +1,15 @@
-"""A picture in the window: painted as one object, and described in a full sentence."""
+"""A picture in the window: painted as one object that Tab stops at, and described in a full sentence."""
 
 from __future__ import annotations
 
 from typing import TYPE_CHECKING, Protocol
 
-from PySide6.QtCore import QSize
+from PySide6.QtCore import QSize, Qt
 from PySide6.QtGui import QPainter, QPaintEvent
 from PySide6.QtWidgets import QSizePolicy, QWidget
 
 from fourcount.face.look import Look
+from fourcount.wording.spoken import PICTURE
 
 if TYPE_CHECKING:
     from fourcount.ink.style import Style
@@ -32,12 +33,17 @@ class PictureView(QWidget):
         policy = QSizePolicy(QSizePolicy.Policy.Expanding, QSizePolicy.Policy.Minimum)
         policy.setHeightForWidth(True)
         self.setSizePolicy(policy)
+        self._name = name
         self.setAccessibleName(name)
+        self.setFocusPolicy(Qt.FocusPolicy.TabFocus)
         self.hide()
         look.changed.connect(self._on_look_changed)
 
-    def show_picture(self, picture: Drawn | None, sentence: str) -> None:
-        """Show a picture, or nothing; an equal one changes nothing."""
+    def show_picture(self, picture: Drawn | None, sentence: str, summary: str = "") -> None:
+        """Show a picture, or nothing; an equal one changes nothing. Whoever listens is told what changed."""
+        name = PICTURE.format(name=self._name, summary=summary) if summary else self._name
+        if name != self.accessibleName():
+            self.setAccessibleName(name)
         if sentence != self.accessibleDescription():
             self.setAccessibleDescription(sentence)
         if picture is not None and picture == self.picture:
@@ -68,6 +74,9 @@ class PictureView(QWidget):
         if self.picture:
             painter = QPainter(self)
             self.picture.draw(painter, self._look, 0, 0, self.width())
+            if self.hasFocus():  # above and below, since words and icons begin at the very edge
+                for y in (0, self.height() - 2):
+                    painter.fillRect(0, y, self.width(), 2, self._look.colour("accent"))
             painter.end()
 
     def _on_look_changed(self) -> None:

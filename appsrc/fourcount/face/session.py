@@ -134,7 +134,8 @@ class Session(QObject):
         Without a place the view stays where no other outcome has changed, and goes to the first one otherwise. With a
         document the record is another paper's.
         """
-        if record == self.record and document is None:
+        anew = document is not None and (self.document.path is not None or self.document.saved != document.saved)
+        if record == self.record and not anew:
             self.look_at(self.view if view is None else view)
             return
         after = _checked(record, self._place_in(record) if view is None else view)

@@ -2,9 +2,11 @@
 
 from __future__ import annotations
 
+import sys
+
 from PySide6.QtCore import QSize, Qt
-from PySide6.QtGui import QDragEnterEvent
-from PySide6.QtWidgets import QLabel, QLineEdit, QSizePolicy
+from PySide6.QtGui import QDragEnterEvent, QPainter, QPaintEvent, QPen
+from PySide6.QtWidgets import QComboBox, QLabel, QLineEdit, QSizePolicy, QWidget
 
 from fourcount.face.look import Look
 from fourcount.ink.style import Role
@@ -31,6 +33,13 @@ class TextOnly(QLineEdit):
             event.ignore()
         else:
             super().dragEnterEvent(event)
+
+
+def name_choice(box: QComboBox, name: str) -> None:
+    """Give a choice a name that is heard: but for Windows, Qt tells the value as the name, and the name nowhere."""
+    box.setAccessibleName(name)
+    if sys.platform != "win32":
+        box.setAccessibleDescription(name)
 
 
 class Words(QLabel):
@@ -72,6 +81,20 @@ class Words(QLabel):
             self.hide()
         elif self.isHidden() and self.parent() is not None:
             self.show()
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        super().paintEvent(event)
+        if self.hasFocus():
+            painter = QPainter(self)
+            painter.setPen(QPen(self._look.colour("accent"), 1, Qt.PenStyle.DotLine))
+            painter.drawRect(self.rect().adjusted(0, 0, -1, -1))
+            painter.end()
+
+    def name_of(self, field: QWidget) -> None:
+        """Be the name of a field, which is then told with it."""
+        self.setBuddy(field)
+        if isinstance(field, QComboBox):
+            field.setAccessibleDescription("")  # it is told the name once
 
     def minimumSizeHint(self) -> QSize:
         hint = super().minimumSizeHint()

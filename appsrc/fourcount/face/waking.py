@@ -5,7 +5,7 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 from PySide6.QtGui import QAction
-from PySide6.QtWidgets import QMenu
+from PySide6.QtWidgets import QMenu, QWidget
 
 from fourcount.face import actions as commands_table
 from fourcount.face.checking import Checking
@@ -16,6 +16,7 @@ from fourcount.face.file_commands import FileCommands
 from fourcount.face.file_drops import FileDrops
 from fourcount.face.outcome_commands import OutcomeCommands
 from fourcount.face.outcomes_bar import OutcomesBar
+from fourcount.face.reading import Reading
 from fourcount.face.view_commands import ViewCommands
 from fourcount.picture.options import PictureOptions
 from fourcount.wording.keeping import KEEP_ASIDE
@@ -45,8 +46,11 @@ def wake(window: MainWindow, settings: Settings, later: Later) -> None:
     window.view = ViewCommands(window)
     window.files = FileCommands(window, settings)
     window.keeps_aside = _set_aside_switch(menus["file"], actions["handout"], settings.sets_aside())
-    window.header.take_bar(OutcomesBar(window.look, actions["outcome-add"], menus["outcomes"]))
     FileDrops(window, window.files)
+    bar = OutcomesBar(window.look, actions["outcome-add"], menus["outcomes"])
+    window.header.take_bar(bar)
+    QWidget.setTabOrder(bar.plus, window.banner.dismiss)
+    window.reading = Reading(window)
 
 
 def _set_aside_switch(menu: QMenu, before: QAction, on: bool) -> QAction:

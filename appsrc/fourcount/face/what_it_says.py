@@ -5,10 +5,11 @@ from __future__ import annotations
 from collections.abc import Sequence
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QTimer, Signal
+from PySide6.QtCore import Qt, QTimer, Signal
 from PySide6.QtWidgets import QVBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.links import Link
 from fourcount.face.look import Look
@@ -62,6 +63,7 @@ class WhatItSays(FieldsView):
         self._shown: tuple[Outcome, OutcomeFindings, Choices] | None = None
         self._show_more = False
         self.sentence = Words(look, "sentence", selectable=True)
+        self.sentence.setFocusPolicy(Qt.FocusPolicy.StrongFocus)  # Qt gives what can be selected no place for Tab
         self.working = Words(look, "small", selectable=True)
         self.working.hide()
         self.family = ChoiceField(

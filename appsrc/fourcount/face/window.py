@@ -34,6 +34,7 @@ if TYPE_CHECKING:
     from fourcount.face.cursor_keeper import CursorKeeper
     from fourcount.face.file_commands import FileCommands
     from fourcount.face.outcome_commands import OutcomeCommands
+    from fourcount.face.reading import Reading
     from fourcount.face.view_commands import ViewCommands
 
 FIRST_SIZE = QSize(1280, 800)
@@ -55,6 +56,7 @@ class MainWindow(QMainWindow):
     commands: Commands
     cursor_keeper: CursorKeeper
     outcomes: OutcomeCommands
+    reading: Reading
     view: ViewCommands
     drawing: tuple[QActionGroup, QActionGroup]
     files: FileCommands
@@ -162,7 +164,7 @@ class MainWindow(QMainWindow):
             self.header.bar.tabs.moved.connect(among.move_to)
         self.drawing[0].triggered.connect(see.take_icons)
         self.drawing[1].triggered.connect(see.take_arrangement)
-        among.begun.connect(go.to_outcome)
+        among.begun.connect(go.to_first_cell)
         among.told.connect(self._on_told)
         self.keeps_aside.triggered.connect(self.files.switch_set_aside)
         self.session.changed.connect(self.files.follow)

@@ -27,7 +27,7 @@ LEAST_PERSON = 7.2
 ROWS_APART: dict[Icons, float] = {"person": 0.14, "block": 0.0, "dot": 0.0}
 """The space between rows, in icon widths: without it feet would touch the heads below."""
 
-LEAST_ACROSS = 1.16
+LEAST_ACROSS = 1.1
 """How wide the cell of a person is where there is room for it, by the person."""
 
 GAP, CAPTION_GAP = 18, 10
@@ -76,14 +76,15 @@ class BesidePicture:
         left, tall = laid.width + style.px(CAPTION_GAP), laid.height
         sheet, plan = Sheet(painter, style), self._it.plan
         said = captions(style, (self._it.words.without, self._it.words.with_), each - left)
+        lines = [max(paragraph_height(runs, each - left) for runs in pair) for pair in zip(*said, strict=True)]
         for column, (caption, people) in enumerate(zip(said, (plan.without, plan.with_), strict=True)):
             at, down = x + column * (each + style.px(GAP)), 0.0
             if painter:
                 draw_array(painter, QPointF(at, y), people, laid, style.palette, icons)
-            for runs in caption:
+            for runs, line in zip(caption, lines, strict=True):
                 if painter:
                     draw_paragraph(painter, at + left, y + down, each - left, runs)
-                down += paragraph_height(runs, each - left) + style.px(2)
+                down += line + style.px(2)
             if key_aside:
                 down += style.px(6)
                 down += set_key(sheet, at + left, y + down, each - left, self._entries(column), icons, laid)

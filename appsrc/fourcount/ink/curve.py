@@ -20,8 +20,10 @@ from typing import TYPE_CHECKING, Literal
 from PySide6.QtCore import QStandardPaths
 
 from fourcount.appraisal.findings.curve import Curve
-from fourcount.ink.curve_layout import Box, CurveLayout, Dash, Marks, Shape, Sheet
+from fourcount.ink.curve_layout import CurveLayout
+from fourcount.ink.curve_sheet import Dash, Marks, Shape, Sheet
 from fourcount.ink.palette import Palette
+from fourcount.picture.places import Box
 from fourcount.wording.curve import CurveWords, View
 
 if TYPE_CHECKING:
@@ -65,16 +67,21 @@ def draw_curve(
         from matplotlib.figure import Figure
 
         figure = Figure(figsize=(sheet.width / 72, sheet.height / 72), dpi=72 * sheet.ratio, facecolor=palette.page)
-        renderer = FigureCanvasAgg(figure).get_renderer()
+        canvas = FigureCanvasAgg(figure)
+        renderers = [canvas.get_renderer()]
         try:
             families = _families(sheet.family, frozenset(c for text in layout.texts for c in text if c > "~"))
-            layout.draw(_Pen(figure, renderer, families))
+            grown = layout.grow(_Pen(figure, renderers[0], families))
+            figure.set_size_inches(grown.width / 72, grown.height / 72)
+            renderers.append(canvas.get_renderer())
+            layout.draw(_Pen(figure, renderers[-1], families))
             target = BytesIO()
             figure.savefig(target, format=kind, dpi=figure.dpi, metadata=_metadata(kind, words))
             return target.getvalue()
         finally:
             figure.clear()
-            vars(renderer).clear()  # the library's cycles would hold megabytes of dots until somebody collects them
+            for renderer in renderers:
+                vars(renderer).clear()  # the library's cycles would hold megabytes of dots until somebody collects them
 
 
 @cache
@@ -107,12 +114,13 @@ def _own_cache() -> Iterator[None]:
 
 
 def _metadata(kind: Format, words: CurveWords) -> dict[str, str | None]:
+    """What a file says of itself: the whole of every text, whatever the drawing had to cut."""
+    said = " ".join(part for part in (words.heading, words.described) if part)
     if kind == "png":
-        return {"Software": "Fourcount", "Title": words.title, "Description": words.sentence}
+        return {"Software": "Fourcount", "Title": words.title, "Description": said}
     if kind == "svg":
-        said = " ".join((words.sentence, *words.notes))
         return {"Creator": "Fourcount", "Date": None, "Title": words.title, "Description": said}
-    return {"Creator": "Fourcount", "Producer": None, "CreationDate": None, "Title": words.title}
+    return {"Creator": "Fourcount", "Producer": None, "CreationDate": None, "Title": words.title, "Subject": said}
 
 
 @cache

@@ -20,7 +20,7 @@ from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
 from fourcount.ink.plain_picture import Shown, shown
 from fourcount.ink.style import Role
 from fourcount.picture.common import common_denominator
-from fourcount.picture.options import USUAL
+from fourcount.picture.options import USUAL, PictureOptions
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
 from fourcount.wording import handout as words
@@ -68,6 +68,9 @@ WAYS = {1: FOR_ONE, 2: FOR_TWO, 3: FOR_THREE}
 LONGEST_LEAD = (True, False)
 """People drawn as figures and as marks: the words for that are the longest that a page can need."""
 
+MOST = 12
+"""More outcomes than any page holds in whatever way."""
+
 LARGEST_ARRAY = 520
 FOOT_SIZE = 11
 BLOCK_GAP = 12
@@ -90,6 +93,16 @@ class NoPage(NamedTuple):
     """Why there is no page, in one sentence."""
 
     sentence: str
+
+
+class _Making(NamedTuple):
+    """What a page is made from, whichever outcomes are on it."""
+
+    record: Record
+    paper: Paper
+    version: str
+    today: date
+    options: PictureOptions
 
 
 class _Fit(NamedTuple):
@@ -132,15 +145,23 @@ class Handout:
             y += draw_paragraph(painter, x, y, wide, runs) + 2
 
 
-def compose(record: Record, named: Sequence[Named], paper: Paper, version: str, today: date) -> Handout | NoPage:
+def compose(
+    record: Record,
+    named: Sequence[Named],
+    paper: Paper,
+    version: str,
+    today: date,
+    options: PictureOptions = USUAL,
+) -> Handout | NoPage:
     """The page of these outcomes, all of which can be shown; a sentence where they do not fit on one."""
     if not named:
         return NoPage(words.NOTHING_TICKED)
-    page = _composed(record, named, paper, version, today)
+    making = _Making(record, paper, version, today, options)
+    page = _composed(making, named) if len(named) <= MOST else None
     if page is not None:
         return page
     fits = 0
-    while fits + 1 < len(named) and _composed(record, named[: fits + 1], paper, version, today):
+    while fits + 1 < min(len(named), MOST) and _composed(making, named[: fits + 1], FOR_ANY[-1:]):
         fits += 1
     if not fits:
         return NoPage(words.TOO_LONG)
@@ -148,21 +169,29 @@ def compose(record: Record, named: Sequence[Named], paper: Paper, version: str, 
     return NoPage(words.TOO_MANY.format(fit=fits, count=len(named), rest=rest))
 
 
-def _composed(record: Record, named: Sequence[Named], paper: Paper, version: str, today: date) -> Handout | None:
-    """One denominator for all where one shows all honestly and fits the page, else each its own."""
+def _composed(making: _Making, named: Sequence[Named], ways: Sequence[Try] = ()) -> Handout | None:
+    """One denominator for all where one shows all honestly and fits the page, else each its own.
+
+    ``ways`` are those of setting it that are tried, none for all: the last of all takes the least room.
+    """
     own = [shown(outcome, findings) for outcome, findings in named]
     pairs = [(it.plan.without_risk, it.plan.with_risk) for it in own if it]
     common = common_denominator(pairs)
     for denominator in dict.fromkeys((common, None)):
-        pages = [shown(outcome, findings, USUAL, denominator) for outcome, findings in named]
+        pages = [shown(outcome, findings, making.options, denominator) for outcome, findings in named]
         ready = [_as_marks(it) for it in pages if it]
         differ = len({it.words.who for it in ready}) > 1
         blocks = [Block(it, tells_who=differ) for it in ready]
-        fit = _fitted(_words(record, named, ready, LONGEST_LEAD, version, today), blocks, paper)
+        tried = ways or (*WAYS.get(len(blocks), ()), *FOR_ANY)
+        fit = _fitted(_words(making, named, ready, LONGEST_LEAD), blocks, making.paper, tried)
         if fit is not None:
-            wide = (paper.width - 2 * MARGIN) * PER_MM
-            persons = [block.has_persons(fit.style, fit.setting, wide, fit.array) for block in blocks]
-            return Handout(_words(record, named, ready, persons, version, today), blocks, paper, fit)
+            wide = (making.paper.width - 2 * MARGIN) * PER_MM
+            persons = [
+                block.has_persons(fit.style, fit.setting, wide, fit.array)
+                for block, it in zip(blocks, ready, strict=True)
+                if it.plan.denominator
+            ]
+            return Handout(_words(making, named, ready, persons), blocks, making.paper, fit)
     return None
 
 
@@ -171,25 +200,23 @@ def _as_marks(it: Shown) -> Shown:
     return it if it.plan.denominator == 100 else it._replace(options=it.options._replace(icons="block"))
 
 
-def _words(
-    record: Record, named: Sequence[Named], ready: Sequence[Shown], persons: Sequence[bool], version: str, today: date
-) -> HandoutWords:
+def _words(making: _Making, named: Sequence[Named], ready: Sequence[Shown], persons: Sequence[bool]) -> HandoutWords:
     patients = [(outcome, findings.patient) for outcome, findings in named]
     return words.handout_words(
-        record,
+        making.record,
         [(outcome, patient) for outcome, patient in patients if not isinstance(patient, Gap)],
         [it.plan.denominator for it in ready],
-        [it.words.sentence for it in ready],
+        [it.words.told(ranged=it.options.uncertainty, printed=True) for it in ready],
         persons,
-        version,
-        today,
+        making.version,
+        making.today,
     )
 
 
-def _fitted(page: HandoutWords, blocks: Sequence[Block], paper: Paper) -> _Fit | None:
+def _fitted(page: HandoutWords, blocks: Sequence[Block], paper: Paper, ways: Sequence[Try]) -> _Fit | None:
     """The way to set the page that is best to read and fits; None for none."""
     wide = (paper.width - 2 * MARGIN) * PER_MM
-    for way in (*WAYS.get(len(blocks), ()), *FOR_ANY):
+    for way in ways:
         style = PaperStyle(way.scale, way.sizes)
         if way.whole and any(block.counts_wrap(style, wide) for block in blocks):
             continue

@@ -17,7 +17,7 @@ from fourcount.wording import plain_texts
 GAP = 24
 """Room between the people and the words beside them, at 100%."""
 
-BESIDE = 0.66
+BESIDE = 0.68
 """The share of the width that the people get where words stand beside them."""
 
 PARAGRAPH = 4
@@ -122,6 +122,7 @@ class Block:
         rest = (words.which, words.certainty, words.relative, *words.other_starts)
         said = [
             *beside_or_below([Run(words.summary, total, palette.ink), Run(words.open_, total, palette.ink)], width),
+            [Run(words.rounded, body, palette.muted)],
             [Run(words.doubt, style.font("cell"), palette.ink)],
             [*(Run(text, body, palette.ink) for text in rest), Run(words.study, body, palette.muted)],
         ]

@@ -9,7 +9,7 @@ from PySide6.QtGui import QColor, QPainter
 
 from fourcount.ink.paper_style import SCREEN_SIZES, PaperStyle
 from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
-from fourcount.ink.plain_picture import PlainPicture, Shown, beside_or_below
+from fourcount.ink.plain_picture import PlainPicture, Shown, beside_or_below, on_one_line
 from fourcount.wording import plain_texts
 
 DESIGNED_FOR = (1280, 690)
@@ -39,7 +39,7 @@ class PatientPage:
     def __init__(self, it: Shown) -> None:
         self._words = it.words
         self._drawn = it.plan.denominator is not None and it.options.arrangement != "bars"
-        self._icons = it.options.icons
+        self._persons = it.options.icons == "person" and it.plan.denominator == 100  # larger crowds are marks
         self._range = it.options.uncertainty
         self._picture = PlainPicture(it)
 
@@ -87,11 +87,16 @@ class PatientPage:
 
     def _above(self, style: PaperStyle, wide: float) -> list[Spaced]:
         words, ink, muted, body = self._words, style.palette.ink, style.palette.muted, style.font("body")
-        each = {"person": plain_texts.EACH_FIGURE}.get(self._icons, plain_texts.EACH_MARK) if self._drawn else ""
-        turned = words.turned if self._drawn else ""
+        each = plain_texts.EACH_FIGURE if self._persons else plain_texts.EACH_MARK
+        lead = [Run(each if self._drawn else "", body, muted), Run(words.lead, body, muted)]
+        turned = Run(words.turned if self._drawn else "", body, ink)
+        below = [lead] if not turned.text else [[*lead, turned]]
+        if turned.text and not on_one_line(below[0], wide):
+            below = [lead, [turned]]
         return [
             ([Run(words.title, style.font("estimate"), ink)], style.px(3)),
-            ([Run(each, body, muted), Run(words.lead, body, muted), Run(turned, body, ink)], style.px(14)),
+            *((runs, 0.0) for runs in below[:-1]),
+            (below[-1], style.px(14)),
         ]
 
     def _below(self, style: PaperStyle, wide: float) -> list[Spaced]:
@@ -100,6 +105,7 @@ class PatientPage:
         sentence = style.font("sentence")
         said = [
             *beside_or_below([Run(words.summary, sentence, ink), Run(words.open_, sentence, ink)], wide),
+            [Run(words.rounded, body, muted)],
             [Run(words.doubt, style.sized(DOUBT), ink)],
             [Run(words.which, body, ink), Run(words.certainty, body, ink), Run(words.study, body, muted)],
         ]

@@ -18,14 +18,14 @@ from fourcount.picture.plan import Plan, plan_on
 from fourcount.record.outcome import Outcome
 from fourcount.wording import numbers, plain_texts
 from fourcount.wording.axis import axis_words
-from fourcount.wording.picture_words import KeyEntry, PictureWords, Side, people_of
+from fourcount.wording.picture_words import OPEN, KeyEntry, PictureWords, Side, people_of, too_close
 from fourcount.wording.plain import is_turned
 from fourcount.wording.plain_outcome import PlainSide, PlainWords, plain_words
 from fourcount.wording.plain_refusal import why_not
 from fourcount.wording.plain_risks import plain_risks
 
-LEAST_ARRAY, GOOD_ARRAY = 110, 205
-"""How high an array is at least, and where there is room, at 100%: a hundred people of some 11 and 20 pixels."""
+LEAST_ARRAY, GOOD_ARRAY = 140, 205
+"""How high an array is at least, and where there is room, at 100%: a hundred people of some 14 and 20 pixels."""
 
 FIGURE_SIZES = (1.0, 0.95, 0.9, 0.85, 0.8)
 """Parts of the usual size at which a count may be set to stay on one line."""
@@ -200,15 +200,15 @@ def picture_words(it: Shown) -> PictureWords:
     entries = (
         KeyEntry("affected", pattern.format(words=words.event)),
         KeyEntry("others", pattern.format(words=words.other)),
-        KeyEntry("added", words.added),
-        KeyEntry("avoided", words.avoided),
-        KeyEntry("uncertain", plain_texts.EITHER),
+        KeyEntry("added", plain_texts.ADDED),
+        KeyEntry("avoided", plain_texts.AVOIDED),
+        KeyEntry("uncertain", OPEN),
     )
     low, _, high = axis_words("risk", bar_pair(plan).top)
     return PictureWords(
         without=_side(words.without),
         with_=_side(words.with_),
-        key=tuple(entry for entry in entries if entry.text),
+        key=entries,
         note=_note(it),
         lines=(),
         bar_ends=(low, high),
@@ -223,9 +223,9 @@ def _note(it: Shown) -> str:
     """What has to be said of the picture itself."""
     parts = []
     if it.plan.denominator is None:
-        parts.append(plain_texts.TOO_SMALL)
+        parts.append(plain_texts.TOO_CLOSE if too_close(it.plan) else plain_texts.TOO_SMALL)
     elif it.plan.denominator != 100:
         parts.append(plain_texts.EACH_PICTURE.format(people=numbers.whole(it.plan.denominator)))
     if it.options.uncertainty:
-        parts.append(it.words.range_)
-    return " ".join(part for part in (*parts, it.words.rounded) if part)
+        parts.append(it.words.range_ or plain_texts.NO_RANGE)
+    return " ".join(part for part in parts if part)

@@ -122,8 +122,13 @@ def _text(name: str, value: object) -> str:
     if value is None:
         return ""
     if not isinstance(value, str) or not value.strip():
-        raise ValueError(words.NOT_A_TEXT.format(name=name, example=words.EXAMPLES[name], given=shown(value)))
+        raise ValueError(words.NOT_A_TEXT.format(name=_named(name), example=words.EXAMPLES[name], given=shown(value)))
     return value
+
+
+def _named(name: str) -> str:
+    """What a sentence calls an option."""
+    return words.NAMES.get(name, name)
 
 
 def _span(name: str, value: object) -> str:
@@ -166,7 +171,7 @@ def _adjusted(value: object, outcome: Outcome) -> str:
     text = _text("adjusted", value)
     if text and read_effect(text, outcome.adjusted_measure, "adjusted_text").figure is None:
         raise ValueError(
-            words.NOT_A_TEXT.format(name="adjusted", example=words.EXAMPLES["adjusted"], given=shown(value))
+            words.NOT_A_TEXT.format(name=_named("adjusted"), example=words.EXAMPLES["adjusted"], given=shown(value))
         )
     return text
 
@@ -190,7 +195,7 @@ def _with_line(outcome: Outcome, wishes: Wishes) -> Outcome:
     if side is None:
         reading = readings[0][1]
         reason = mark_text(reading) if isinstance(reading, Unreadable) else words.EXAMPLES[name]
-        raise ValueError(words.UNUSABLE.format(name=name, reason=reason))
+        raise ValueError(words.UNUSABLE.format(name=_named(name), reason=reason))
     return msgspec.structs.replace(
         outcome,
         line_kind="margin" if name == "margin" else "matters",
@@ -206,5 +211,5 @@ def _scale(name: str, text: str) -> tuple[LineScale, str]:
     if match:
         return SCALES[match[1].upper()], match[2]
     if not _WITH_UNIT.search(text) or isinstance(read_margin(text, "risk_difference", "more"), Blank):
-        raise ValueError(words.NOT_A_TEXT.format(name=name, example=words.EXAMPLES[name], given=shown(text)))
+        raise ValueError(words.NOT_A_TEXT.format(name=_named(name), example=words.EXAMPLES[name], given=shown(text)))
     return "risk_difference", text

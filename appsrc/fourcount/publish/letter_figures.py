@@ -115,5 +115,5 @@ def _more(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings)
     if key == "risk_ratio" and not isinstance(figure.estimate, Gap):
         more.append(limits.relative(figure.estimate))
     if key == "odds_ratio":
-        more.append(lines.conversion_text(findings.conversion, names.risk_name(outcome)))
+        more.append(lines.conversion_text(findings.conversion, outcome))
     return (*more, half_added(figure))

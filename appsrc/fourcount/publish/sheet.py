@@ -55,7 +55,7 @@ def rows(record: Record, outcome: Outcome, findings: OutcomeFindings, *, version
         *_measures(outcome, findings, choices),
         *extra_rows(outcome, findings, choices),
         _p(findings),
-        *_converted(findings),
+        *_converted(outcome, findings),
         *patient_rows(outcome, findings, choices),
         *(note_row(exports.CAUTION_ROW, caution_text(caution)) for caution in findings.cautions),
         *(note_row(exports.NOTE_ROW, note) for note in notes),
@@ -102,12 +102,12 @@ def _p(findings: OutcomeFindings) -> Row:
     return (exports.P_NAME, p_cell(test.p), "", "", title, gap_text(test.p) if isinstance(test.p, Gap) else "")
 
 
-def _converted(findings: OutcomeFindings) -> tuple[Row, ...]:
+def _converted(outcome: Outcome, findings: OutcomeFindings) -> tuple[Row, ...]:
     """Only at a starting risk from elsewhere: at the study's own it is the risk ratio, which has a row."""
     conversion = findings.conversion
     if isinstance(conversion, Gap) or conversion.baseline_from == "reference":
         return ()
-    baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
+    baseline = lines.baseline_text(conversion, outcome)
     name = exports.CONVERTED.format(baseline=baseline)
     key = "pooled_odds_ratio" if findings.form == "strata" else "odds_ratio"
     return (figure_row(name, conversion.risk_ratio, key, findings.form),)

@@ -11,6 +11,7 @@ from fourcount.stats.results import Gap
 Effect = Literal["risk_ratio", "odds_ratio", "hazard_ratio", "rate_ratio", "risk_difference"]
 
 _ROUNDING = 1e-12
+_LAST_BITS = 1e-15
 
 
 def risk_ratio_from_odds_ratio(odds_ratio: float, baseline: float) -> float:
@@ -49,9 +50,9 @@ def undetermined(effect: Effect, value: float, baseline: float) -> bool:
 def unbounded_risk(effect: Effect, value: float, baseline: float) -> float:
     """The same formula's figure whether or not it is a risk; not for what is undetermined."""
     if effect == "risk_ratio":
-        return value * baseline
+        return _everybody(value * baseline)
     if effect == "risk_difference":
-        return baseline + value
+        return _everybody(baseline + value)
     if effect == "odds_ratio":
         return _risk_at_odds(value, baseline)
     return risk_with_hazard(baseline, value)
@@ -65,6 +66,11 @@ def a_risk(figure: float) -> float | Gap:
     if figure > 1.0:
         return 1.0 if figure <= 1.0 + _ROUNDING else Gap("beyond-one")
     return 0.0 if figure >= -_ROUNDING else Gap("carried-beyond-zero")
+
+
+def _everybody(figure: float) -> float:
+    """1 where only last bits are missing to it or beyond it: over a shorter span they would be no trifle."""
+    return 1.0 if abs(figure - 1.0) < _LAST_BITS else figure
 
 
 def _risk_at_odds(odds_ratio: float, baseline: float) -> float:

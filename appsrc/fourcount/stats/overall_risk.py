@@ -87,4 +87,4 @@ def _from_hazards(hazard_ratio: float, overall: float, share: float) -> float | 
     low, high = sorted((whole, min(whole / hazard_ratio, _MOST)))
     start = -math.expm1(-increasing_root(curve, low * (1.0 - 1e-9), high * (1.0 + 1e-9), whole))
     # So near to everybody that no digit is left to carry the effect from.
-    return start if start < 1.0 else Gap("beyond-one")
+    return start if start < 1.0 else Gap("next-to-certain")

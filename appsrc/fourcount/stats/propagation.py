@@ -24,6 +24,8 @@ from fourcount.stats.results import Gap, Interval
 
 _STEPS = 16  # of a quarter circle, before the best of them is refined
 _GOLDEN = (math.sqrt(5.0) - 1.0) / 2.0
+_BESIDE = 1e-6  # of an angle
+_LAST_BIT = 1e-15  # a cosine below it is that of a right angle
 _NARROW = 1e-8  # of an angle: at a smooth extreme the figure is then known to its last bits
 
 
@@ -50,7 +52,7 @@ class StartLimits:
     def at(self, z: float) -> float:
         """Wilson's limit z standard errors away, the lower one for a z below 0; the value itself at 0."""
         people = self.above if z > 0.0 else self.below
-        if z == 0.0 or math.isinf(people):
+        if z == 0.0 or math.isinf(people) or (self.value == 1.0 and z > 0.0):
             return self.value
         if people == 0.0:
             return 1.0 if z > 0.0 else 0.0
@@ -65,11 +67,10 @@ class StartLimits:
 class Propagated:
     """The limits of what follows at a starting risk.
 
-    ``without`` is the starting risk's own interval, ``with_`` the risk with, ``difference`` with minus without, and
-    ``risk_ratio`` with over without, whatever effect was carried.
+    ``with_`` is the risk with, ``difference`` with minus without, and ``risk_ratio`` with over without, whatever effect
+    was carried.
     """
 
-    without: Limits
     with_: Limits
     difference: Limits
     risk_ratio: Limits
@@ -133,7 +134,6 @@ def propagated(
     own = effect == "risk_ratio" and spans == 1.0
     ratio = Limits(low=interval.low, high=interval.high) if own else Limits(low=low[2], high=high[2])
     return Propagated(
-        without=Limits(low=over_spans(start.at(-z), spans), high=over_spans(start.at(z), spans)),
         with_=Limits(low=low[0], high=high[0]),
         difference=Limits(low=low[1], high=high[1]),
         risk_ratio=ratio,
@@ -170,8 +170,10 @@ class _Carry:
 
             best = _highest(height, angles, [side * point[place] for point in points])
             found = self._point(limit, best)
-            risk = a_risk(found.risk)
-            return risk if isinstance(risk, Gap) else found[place]
+            # What lies where risks end says where they end, and not how far the figure reaches.
+            beside = (best,) if self.spans == 1.0 else (best, best - _BESIDE, best + _BESIDE)
+            risks = (a_risk(self._point(limit, angle).risk) for angle in beside)
+            return next((risk for risk in risks if isinstance(risk, Gap)), found[place])
 
         return extreme(1), extreme(2), extreme(3)
 
@@ -189,7 +191,8 @@ class _Carry:
 
     def _point(self, limit: float, angle: float) -> _Point:
         start = self.start.at(self.z * math.sin(angle))
-        value = self._value(limit, math.cos(angle))
+        share = math.cos(angle)
+        value = self._value(limit, share if share > _LAST_BIT else 0.0)
         risk = unbounded_risk(self.effect, value, start)
         if self.spans == 1.0:
             return _Point(risk, risk, risk - start, self._ratio(value, start, risk))

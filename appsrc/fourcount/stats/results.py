@@ -19,6 +19,7 @@ GAP_KEYS = (
     "one-outcome",  # nobody, or everybody, in the group had the event: its log odds are infinite
     "beyond-one",  # a risk would pass 100%
     "undetermined-at-baseline",  # an infinite effect at a starting risk of 0, or an odds ratio of 0 at a risk of 1
+    "next-to-certain",  # a risk lies so near 100% that no digit is left of what is missing to it
     "beyond-zero",  # a risk would fall below 0
     "carried-beyond-zero",  # a difference kept constant would take a risk below 0
     "no-discordant-pairs",  # all pairs agree: the odds ratio of pairs is 0/0

@@ -7,6 +7,8 @@ import math
 from fourcount.stats.log_scale import exponential
 from fourcount.stats.results import Gap, Interval, LimitedRisk, TimedRisks
 
+_LAST_BITS = 1e-12
+
 
 def timed_difference(timed: TimedRisks) -> float:
     """The index group's risk less the reference group's."""
@@ -36,7 +38,7 @@ def square_and_add(timed: TimedRisks, level: float | None = None) -> Interval | 
     above = math.hypot(one.high - one.risk, two.risk - two.low)
     if below == 0.0 and above == 0.0:
         return Gap("no-width")
-    return Interval(low=difference - below, high=difference + above)
+    return Interval(low=_apart(difference, below), high=0.0 - _apart(-difference, above))
 
 
 def square_and_add_ratio(timed: TimedRisks, level: float | None = None) -> Interval | Gap:
@@ -60,6 +62,11 @@ def square_and_add_ratio(timed: TimedRisks, level: float | None = None) -> Inter
     if below == 0.0 and above == 0.0:
         return Gap("no-width")
     return Interval(low=ratio * math.exp(-below), high=ratio * exponential(above))
+
+
+def _apart(difference: float, distance: float) -> float:
+    """The difference less a distance, 0 where they are the same but for a last bit: sqrt(3^2 + 4^2) is 5."""
+    return 0.0 if math.isclose(difference, distance, rel_tol=_LAST_BITS) else difference - distance
 
 
 def _log_ratio(greater: float, lesser: float) -> float:

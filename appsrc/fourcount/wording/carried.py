@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+from math import inf, isclose
+
 from fourcount.appraisal.findings import (
     AnyNumberNeeded,
     Figure,
@@ -12,17 +14,22 @@ from fourcount.appraisal.findings import (
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers, of_people
+from fourcount.wording.durations import duration
 from fourcount.wording.gaps import gap_text, limit_text
 from fourcount.wording.half_added import half_added
 from fourcount.wording.headline import people_for
 
 NOT_GIVEN = "not given"
+ALIKE = 1e-12  # limits that only the last bits tell apart
 NO_WIDTH_NEEDED = f"{numbers.INFINITY}{numbers.TO}{numbers.INFINITY}"
 NO_CHANGE = "the same number"
 CARRY_THE_ODDS = "the odds ratio can be carried instead"
 ODDS_AVOID_IT = "carrying the odds ratio avoids it"
 PAST_AN_END = ("beyond-one", "carried-beyond-zero")
 """Why no risk follows from an effect that is carried; odds never get there."""
+
+OF_WHAT = {"odds_ratio": " (not the odds)", "hazard_ratio": " (not the hazard)", "rate_ratio": " (not the rate)"}
+"""What another effect than a ratio of risks is about."""
 
 NEVER_PAST = ("odds_ratio", "hazard_ratio", "rate_ratio")
 """Effects that no starting risk takes past 100%."""
@@ -94,8 +101,10 @@ def risk_limits(figure: Figure, people: int) -> str:
 
 def no_width(figure: Figure) -> bool:
     """Whether both limits are one and the same, as at a starting risk of nobody: no interval worth the name."""
-    interval = figure.interval
-    return not isinstance(interval, Gap) and interval.low == interval.high
+    if isinstance(figure.interval, Gap):
+        return False
+    low, high = figure.interval.low, figure.interval.high
+    return low == high or (not isinstance(low, Gap) and not isinstance(high, Gap) and isclose(low, high, rel_tol=ALIKE))
 
 
 def _end(limit: float | Gap, people: int) -> str:
@@ -108,7 +117,8 @@ def number_needed(needed: AnyNumberNeeded | Gap, outcome: Outcome) -> str:
     """The number needed of this column, told apart from that of the study."""
     if isinstance(needed, Gap):
         return gap_text(needed)
-    return f"{limits.needed_kind(needed)} at this starting risk {_needed(needed)}{names.if_caused(outcome)}."
+    caused = "" if needed.estimate == inf else names.if_caused(outcome)
+    return f"{limits.needed_kind(needed)} at this starting risk {_needed(needed)}{caused}."
 
 
 def needed_value(needed: AnyNumberNeeded) -> str:
@@ -118,17 +128,24 @@ def needed_value(needed: AnyNumberNeeded) -> str:
 
 def _needed(needed: AnyNumberNeeded) -> str:
     value, interval = numbers.number_needed(needed.estimate), limits.number_needed_interval(needed)
-    return value if interval == NO_WIDTH_NEEDED else f"{value} ({interval})"
+    return value if interval == NO_WIDTH_NEEDED else f"{value}{limits.bracketed(interval)}"
 
 
-def relative_words(patient: PatientFindings) -> str:
-    """The relative figure; none where nobody has the event either way, of whom no share can be more or fewer."""
-    nobody = patient.without.estimate == 0.0 and patient.with_.estimate == 0.0
-    return "" if nobody else relative(patient.risk_ratio)
+def relative_words(outcome: Outcome, patient: PatientFindings) -> str:
+    """The relative figure; none where nobody has the event either way, of whom no share can be more or fewer.
+
+    It is one of risks, which is said where what is kept constant is something else, or is kept over another time.
+    """
+    if patient.without.estimate == 0.0 and patient.with_.estimate == 0.0:
+        return ""
+    over = "" if patient.other_span is None else f" over {duration(patient.other_span)}"
+    kept = OF_WHAT.get(patient.effect, "")
+    subject = f" the {names.risk_name(outcome)}{over}{kept} is" if over or kept else ""
+    return relative(patient.risk_ratio, subject)
 
 
-def relative(ratio: Figure) -> str:
-    """``In relative words 46% lower (22% to 63%).``"""
+def relative(ratio: Figure, subject: str = "") -> str:
+    """``In relative words 46% lower (22% to 63%).``; ``subject`` says what is lower."""
     if isinstance(ratio.estimate, Gap):
         return ""
     change = ratio.estimate - 1
@@ -136,7 +153,7 @@ def relative(ratio: Figure) -> str:
         return ""
     word = limits.LOWER if change < 0 else limits.HIGHER
     interval = "" if half_added(ratio) else limits.bracketed(limits.relative_interval(ratio.interval, ratio.estimate))
-    return f"In relative words {numbers.percent_whole(abs(change))} {word}{interval}."
+    return f"In relative words{subject} {numbers.percent_whole(abs(change))} {word}{interval}."
 
 
 def odds_can_be_carried(findings: OutcomeFindings) -> bool:
@@ -174,5 +191,6 @@ def _of_the_effect(gap: Gap, patient: PatientFindings) -> Gap:
 
 def _offering(said: str, offer: str, gap: Gap, patient: PatientFindings, findings: OutcomeFindings) -> str:
     """The reason, with the odds ratio offered where it would help and there is one."""
-    helps = patient.range_from != "table" and gap.key in PAST_AN_END and patient.effect not in NEVER_PAST
+    moves = 0.0 < patient.baseline < 1.0  # odds of nobody and of everybody stay
+    helps = moves and patient.range_from != "table" and gap.key in PAST_AN_END and patient.effect not in NEVER_PAST
     return f"{said.removesuffix('.')}; {offer}." if helps and odds_can_be_carried(findings) else said

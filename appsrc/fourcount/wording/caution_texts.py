@@ -8,6 +8,8 @@ PLAIN_ESTIMATE = (
     "The estimate stays as it is; the interval is centred on the altered one and need not hold an estimate of 0 or "
     "infinity."
 )
+EFFECT_RANGE = "The interval leaves out that {baseline} is itself uncertain."
+UNKNOWN = ("Caution", "A caution holds here that this version has no sentence for.")
 TEXTS = {
     "read-as": ("How a count was read", "{text} is read as {value}."),
     "percent-disagrees": (
@@ -46,7 +48,7 @@ TEXTS = {
     ),
     "baseline-uncertain": (
         "The starting risk",
-        "The interval leaves out that {baseline} is itself uncertain.",
+        EFFECT_RANGE,
     ),
     "rests-on-baseline": (
         "The starting risk",
@@ -68,13 +70,6 @@ TEXTS = {
         (
             "A {design} does not assign its groups: these are crude figures, and other differences between the groups "
             "may explain them."
-        ),
-    ),
-    "converted-limits": (
-        "Converted limits",
-        (
-            "The odds ratio’s limits are converted at {baseline} as if that were certain; where the odds ratio is "
-            "adjusted, the conversion is approximate."
         ),
     ),
     "zero-cells": (
@@ -117,7 +112,7 @@ TEXTS = {
     ),
     "cannot-be-checked": (
         "No counts",
-        "This effect stands as the paper prints it: without counts nothing here can be worked out anew.",
+        "This effect stands as the paper prints it: without counts nothing here can tell whether it is right.",
     ),
     "interval-rebuilt": (
         "A rebuilt interval",
@@ -208,7 +203,7 @@ TEXTS = {
     ),
     "crude-beside-adjusted": (
         "Crude beside adjusted",
-        ("The figures of this table are crude; the paper’s own {measure}, adjusted{adjusted_for}, is {value}."),
+        "The figures of this table are crude; the paper’s own {measure}, adjusted{adjusted_for}, is {value}.",
     ),
     "adjusted-converted": (
         "An adjusted odds ratio",
@@ -235,20 +230,13 @@ TEXTS = {
     "solved-from-overall": (
         "A starting risk worked out",
         (
-            "The starting risk of {baseline} follows from an overall risk and a share of people exposed, both taken as "
-            "certain, and from the {effect} being the same there."
+            "The starting risk of {baseline} follows from an overall risk, the share of people who have it and the "
+            "{effect}; the first two are taken as certain."
         ),
     ),
     "from-a-rate": (
         "A starting risk from a rate",
         "The starting risk of {baseline} assumes that the rate stays constant over the time span.",
-    ),
-    "crude-carried": (
-        "A crude effect carried",
-        (
-            "The {effect} carried to {baseline} is the crude one: it holds whatever else set the groups apart. An "
-            "adjusted one, where the paper prints it, deals with what was measured of that."
-        ),
     ),
     "within-pairs": (
         "An odds ratio of pairs",

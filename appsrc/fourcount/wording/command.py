@@ -77,6 +77,9 @@ FIELDS = {
     "overall_risk_text": "overall risk",
     "exposed_share_text": "share exposed",
 }
+NAMES = {"matters": "difference that matters", "adjusted": "adjusted effect"}
+"""What a sentence calls an option whose own name is no noun."""
+
 EXAMPLES = {
     "rate": "12 per 1,000 person-years",
     "span": "12 months",

@@ -10,6 +10,7 @@ from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Record
 from fourcount.wording import limits, names, numbers
 from fourcount.wording.effects import carriable_name
+from fourcount.wording.gaps import gap_text
 from fourcount.wording.lines.as_printed import carried_texts
 from fourcount.wording.subject import subject
 
@@ -21,12 +22,13 @@ BOTH = "the study and this patient"
 SHORT = {STUDY: "study", PATIENT: "patient", BOTH: "study and patient"}
 """Beside a point there is little room."""
 
-FROM_HERE = ", past 100% from {start}"
-UP_TO_HERE = ", below 0% up to {start}"
-RATIO_AXIS = "{ratio} (odds ratio kept constant)"
+FROM_HERE = "; at starting {risk}s over {start} the {risk} would pass 100%"
+UP_TO_HERE = "; at starting {risk}s under {start} the {risk} would fall below 0%"
+RATIO_AXIS = "{ratio} with the odds ratio kept constant (logarithmic axis)"
 RISKS_VIEW = "Risk with: {name} and its interval"
 RATIOS_VIEW = "{name} as a {ratio}"
 
+KEEPS_ODDS = "The {name} is kept the same at every starting {risk}. That is an assumption: no study shows it."
 KEEPS = "Each line keeps one effect the same at every starting {risk}. That is an assumption: no study shows it."
 BAND = "The band is the {level} of the {name} at each starting {risk}, which is taken as certain there."
 NO_BAND = "The {name} has no interval here, so it has no band."
@@ -38,6 +40,10 @@ RATIO_TEXT = (
     "100%."
 )
 LEFT_OUT = "Not drawn: the {name}, which gives no line."
+NO_POINT = "The patient at {start} has no point here: {why}."
+NOBODY = "No patient has a point here. {why}"
+ACROSS_AND_UP = "Across: {across}. Upwards: {up}."
+LINES = "Lines: {names}."
 NOTHING = "No effect of this table can be carried to another starting risk, so there is nothing to draw."
 AT_START = "At a starting {risk} of {start}"
 STUDY_OWN = ", the study’s own"
@@ -78,12 +84,13 @@ class CurveWords(NamedTuple):
     sentence: str
     notes: tuple[str, ...]
 
-
-class CurveRow(NamedTuple):
-    """One starting risk of the table of the same numbers, and a text for each line."""
-
-    start: str
-    cells: tuple[str, ...]
+    @property
+    def described(self) -> str:
+        """All of it in full, whatever the drawing has room for."""
+        if not self.names:
+            return " ".join(self.notes)
+        axes = ACROSS_AND_UP.format(across=self.across, up=self.up)
+        return " ".join((axes, LINES.format(names=". ".join(self.names)), self.sentence, *self.notes))
 
 
 def views(outcome: Outcome, curve: Curve) -> list[tuple[View, str]]:
@@ -130,27 +137,6 @@ def curve_words(record: Record, outcome: Outcome, findings: OutcomeFindings, cur
     )
 
 
-def curve_head(outcome: Outcome, curve: Curve, view: View) -> CurveRow:
-    """The heads of the table of the same numbers."""
-    cells = [names.sentence_case(name_and_value(outcome, line.effect)) for line in shown_lines(curve, view)]
-    if view.ratios:
-        cells = [f"{cell} as a {names.effect_name(outcome, 'risk_ratio')}" for cell in cells]
-    return CurveRow(f"Starting {names.risk_name(outcome)}", tuple(cells))
-
-
-def curve_rows(curve: Curve, view: View, starts: tuple[float, ...]) -> list[CurveRow]:
-    """The figures at round starting risks and at the points that are marked, each with its interval."""
-    lines = shown_lines(curve, view)
-    marked = {mark.without: mark for mark in curve.marks}
-    rows = []
-    for start in sorted({_nearest(lines[0], start) for start in starts} | marked.keys()) if lines else ():
-        found = [_point(line, start) for line in lines]
-        label = _start(marked[start]) if start in marked else numbers.percent_given(start)
-        name = f" ({_mark_word(marked[start])})" if start in marked else ""
-        rows.append(CurveRow(f"{label}{name}", tuple(_cell(point, view.ratios) for point in found)))
-    return rows
-
-
 def name_and_value(outcome: Outcome, one: Carriable) -> str:
     """``risk ratio 0.54``."""
     value, _ = carried_texts(one.effect, outcome, one.figure, adjusted=one.adjusted)
@@ -167,10 +153,11 @@ def _line_name(outcome: Outcome, line: CurveLine, view: View, curve: Curve) -> s
         level = limits.interval_name(one.level)
         interval = carried_texts(one.effect, outcome, one.figure, adjusted=one.adjusted)[1]
         text += f" ({level} {interval})"
+    risk = names.risk_name(outcome)
     if line.last < curve.reach:
-        text += FROM_HERE.format(start=numbers.percent(line.last))
+        text += FROM_HERE.format(risk=risk, start=numbers.percent(line.last))
     if line.first > 0:
-        text += UP_TO_HERE.format(start=numbers.percent(line.first))
+        text += UP_TO_HERE.format(risk=risk, start=numbers.percent(line.first))
     return text
 
 
@@ -180,18 +167,19 @@ def _whose(mark: CurveMark) -> str:
     return PATIENT
 
 
-def _mark_word(mark: CurveMark, *, short: bool = False) -> str:
-    """``this patient, low``."""
+def mark_words(mark: CurveMark, *, short: bool = False) -> str:
+    """Whose point it is: ``this patient, low``."""
     whose = _whose(mark)
     return ", ".join(part for part in (SHORT[whose] if short else whose, mark.rank) if part)
 
 
 def _mark_name(mark: CurveMark) -> str:
     """``patient, 12%``."""
-    return f"{_mark_word(mark, short=True)}, {_start(mark)}"
+    return f"{mark_words(mark, short=True)}, {start_text(mark)}"
 
 
-def _start(mark: CurveMark) -> str:
+def start_text(mark: CurveMark) -> str:
+    """The starting risk of a point, the patient's with the digits that it was given."""
     return numbers.percent(mark.without) if mark.of_study else numbers.percent_given(mark.without)
 
 
@@ -206,7 +194,7 @@ def _at(outcome: Outcome, curve: Curve, view: View, mark: CurveMark) -> str:
     """``At a starting risk of 12%: 6.5% with the risk ratio kept constant, 6.3% with the odds ratio.``"""
     risk, own = names.risk_name(outcome), STUDY_OWN if mark.of_study else ""
     lines = shown_lines(curve, view)
-    found = [(carriable_name(outcome, line.effect), _point(line, mark.without).value) for line in lines]
+    found = [(carriable_name(outcome, line.effect), point_at(line, mark.without).value) for line in lines]
     given = [(name, numbers.percent(value)) for name, value in found if not isinstance(value, Gap)]
     if view.ratios:
         ratio = names.effect_name(outcome, "risk_ratio")
@@ -218,12 +206,12 @@ def _at(outcome: Outcome, curve: Curve, view: View, mark: CurveMark) -> str:
             KEPT.format(value=text, name=name, kept="" if place else KEPT_CONSTANT)
             for place, (name, text) in enumerate(given)
         ]
-        parts += [
-            GONE.get(value.key, UNDETERMINED).format(name=name, risk=risk)
-            for name, value in found
-            if isinstance(value, Gap)
-        ]
-    return f"{AT_START.format(risk=risk, start=_start(mark))}{own}: {', '.join(parts)}."
+        parts += [_why_gone(outcome, name, value) for name, value in found if isinstance(value, Gap)]
+    return f"{AT_START.format(risk=risk, start=start_text(mark))}{own}: {', '.join(parts)}."
+
+
+def _why_gone(outcome: Outcome, name: str, gap: Gap) -> str:
+    return GONE.get(gap.key, UNDETERMINED).format(name=name, risk=names.risk_name(outcome))
 
 
 def _written(value: float | Gap) -> str:
@@ -236,7 +224,9 @@ def _notes(outcome: Outcome, findings: OutcomeFindings, curve: Curve, view: View
         return (NOTHING,)
     risk, one = names.risk_name(outcome), lines[0 if view.ratios else view.place].effect
     name, ratio = carriable_name(outcome, one), names.effect_name(outcome, "risk_ratio")
-    found = [RATIO_TEXT.format(name=name, ratio=ratio, risk=risk) if view.ratios else KEEPS.format(risk=risk)]
+    found = [KEEPS_ODDS.format(name=name, risk=risk) if view.ratios else KEEPS.format(risk=risk)]
+    if view.ratios:
+        found.append(RATIO_TEXT.format(name=name, ratio=ratio, risk=risk))
     if isinstance(one.figure.interval, Gap):
         found.append(NO_BAND.format(name=name))
     else:
@@ -252,10 +242,24 @@ def _notes(outcome: Outcome, findings: OutcomeFindings, curve: Curve, view: View
             found.append(OPEN_BAND)
         if view.place == curve.carried and any(_barred(mark) for mark in curve.marks):
             found.append(BAR)
+    found += _pointless(outcome, findings, curve, lines[0 if view.ratios else view.place], view)
     if not isinstance(findings.patient, Gap) and findings.patient.other_span is not None:
         found.append(OTHER_SPAN)
     found += [LEFT_OUT.format(name=carriable_name(outcome, left)) for left in curve.left_out]
     return tuple(found)
+
+
+def _pointless(outcome: Outcome, findings: OutcomeFindings, curve: Curve, chosen: CurveLine, view: View) -> list[str]:
+    """Why a patient has no point."""
+    if isinstance(findings.patient, Gap):
+        return [NOBODY.format(why=gap_text(findings.patient))]
+    name, found = carriable_name(outcome, chosen.effect), []
+    for mark in curve.marks:
+        value = point_at(chosen, mark.without).value
+        on_the_line = view.ratios or not mark.of_study
+        if mark.of_patient and on_the_line and isinstance(value, Gap):
+            found.append(NO_POINT.format(start=start_text(mark), why=_why_gone(outcome, name, value)))
+    return found
 
 
 def _barred(mark: CurveMark) -> bool:
@@ -263,28 +267,6 @@ def _barred(mark: CurveMark) -> bool:
     return mark.of_patient and not isinstance(mark.low, Gap) and not isinstance(mark.high, Gap)
 
 
-def _nearest(line: CurveLine, start: float) -> float:
-    """The starting risk of the point that is nearest."""
-    return min((point.start for point in line.points), key=lambda at: abs(at - start))
-
-
-def _point(line: CurveLine, start: float) -> CurvePoint:
+def point_at(line: CurveLine, start: float) -> CurvePoint:
+    """The point at a starting risk, the nearest one where none is just there."""
     return min(line.points, key=lambda point: abs(point.start - start))
-
-
-def _cell(point: CurvePoint, ratios: bool) -> str:
-    """``6.5% (4.4 to 9.4%)``."""
-    if isinstance(point.value, Gap):
-        return limits.WITHHELD_ENDS.get(point.value.key, NOT_GIVEN)
-    write = numbers.ratio if ratios else numbers.percent
-    if isinstance(point.low, Gap) and isinstance(point.high, Gap):
-        return write(point.value)
-    ends = []
-    for end, sign in ((point.low, ""), (point.high, "%")):
-        if isinstance(end, Gap):
-            ends.append(limits.WITHHELD_ENDS.get(end.key, NOT_GIVEN))
-        elif ratios:
-            ends.append(numbers.ratio_limit(end, point.value))
-        else:
-            ends.append(numbers.percent_limit(end, point.value, sign))
-    return f"{write(point.value)} ({numbers.TO.join(ends)})"

@@ -6,7 +6,8 @@ from fourcount.wording.file_labels import CLOSE, SAVE, file_labels
 
 __all__ = [
     "CLOSE", "COPIED", "COPY", "COPY_NAME", "DRAWING", "FILE_NAME", "FILTERS", "HIDE_NUMBERS", "NEAR", "NOT_SAVED",
-    "SAVE", "SAVED", "SAVE_TITLE", "SHOW_NUMBERS", "TABLE_NAME", "UNKNOWN_SUFFIX", "VIEW_NAME", "WHOLE", "WINDOW_TITLE",
+    "NO_ROOM", "SAVE", "SAVED", "SAVE_TITLE", "SHOW_NUMBERS", "TABLE_NAME", "UNKNOWN_SUFFIX", "VIEW_NAME", "WHOLE",
+    "WINDOW_TITLE",
 ]  # fmt: skip
 
 WINDOW_TITLE = "Across starting risks"
@@ -21,4 +22,5 @@ COPY = "Copy"
 COPY_NAME = "Copy the curve"
 COPIED = "The curve is copied, with what has to be kept in mind."
 SAVE_TITLE, SAVED, NOT_SAVED, UNKNOWN_SUFFIX, FILTERS = file_labels("the curve", ".png", ".svg", ".pdf")
+NO_ROOM = "the disk may be full"
 FILE_NAME = "curve"

@@ -3,13 +3,16 @@
 from __future__ import annotations
 
 from fourcount.record.entry.readings import Mark, Unreadable
-from fourcount.record.outcome import Form
 from fourcount.stats.results import Gap
 from fourcount.wording.facts import told
 from fourcount.wording.marks import MARK_TEXTS
 
-__all__ = ["GAP_TEXTS", "LIMIT_TEXTS", "MARK_TEXTS", "gap_text", "limit_text", "mark_text", "why_no_patient"]
+__all__ = ["GAP_TEXTS", "LIMIT_TEXTS", "MARK_TEXTS", "gap_text", "limit_text", "mark_text"]
 
+NO_EXACT = (
+    "Counts divided by a design effect are not whole, and exact methods take whole counts only; the score family gives "
+    "this figure."
+)
 GAP_TEXTS = {
     # the numbers themselves
     "empty-table": "There is nobody in either group.",
@@ -23,6 +26,7 @@ GAP_TEXTS = {
     "the score family gives one.",
     "beyond-one": "The risk would pass 100% here.",
     "carried-beyond-zero": "The risk would fall below 0% here.",
+    "next-to-certain": "Those without it would have a risk so near 100% that nothing can be told from it.",
     "beyond-zero": "The bare formula’s limit falls below 0%, where no risk lies; the score intervals stay above it.",
     "no-discordant-pairs": "All pairs agree, so their odds ratio is not determined: only pairs that differ tell.",
     "concordant-pairs-unknown": "Only the pairs that differ were typed: without those that agree no risk follows.",
@@ -38,8 +42,7 @@ GAP_TEXTS = {
     "zero-count": "One of the two counts compared is 0, where the bare formula has no interval; "
     "the score family gives one.",
     "cluster-below-one": "A cluster holds one person at least.",
-    "not-whole": "Counts divided by a design effect are not whole, and exact methods take whole counts only; "
-    "the score family gives this figure.",
+    "not-whole": NO_EXACT,
     "too-few-left": "Divided by the design effect, no more than one person is left, so nothing can be told.",
     "ratio-below-one": "The group exposed fared better, so there is no share of events that the exposure explains.",
     "ratio-above-one": "The group exposed fared worse, so there is no share of events that the exposure prevents.",
@@ -69,8 +72,7 @@ GAP_TEXTS = {
     "narrow: an intracluster correlation from 0 to 1 is needed.",
     "cluster-size-missing": "Type the mean size of a cluster: the intracluster correlation alone does not say "
     "how much the intervals widen.",
-    "cluster-no-exact": "Counts divided by a design effect are not whole, and exact methods take whole counts only; "
-    "the score family gives this figure.",
+    "cluster-no-exact": NO_EXACT,
     "effect-unreadable": "The printed effect cannot be read; “0.54 (0.37 to 0.78)” would do.",
     "effect-not-typed": "Type the printed effect with its limits, such as 0.54 (0.37 to 0.78).",
     "no-interval-printed": "The paper gives neither limits nor an exact p to rebuild them from.",
@@ -106,8 +108,8 @@ GAP_TEXTS = {
     "rate-not-typed": "Type a rate, such as 12 per 1,000 person-years.",
     "rate-unreadable": "The rate cannot be read; 12 per 1,000 person-years would do.",
     "rate-needs-span": "Type the study’s time span, such as 12 months: a rate gives a risk only over a time.",
-    "overall-not-typed": "Type the risk of all people together, and the share of them who have the exposure.",
-    "overall-unreadable": "The overall risk or the share exposed cannot be read; 12% and 30% would do.",
+    "overall-not-typed": "Type the risk of all people together, and the share of them who are like the index group.",
+    "overall-unreadable": "The overall risk, or the share of people who have it, cannot be read; 12% and 30% would do.",
     "span-unreadable": "The other time span cannot be read; 5 years would do.",
     "other-span-needs-study-span": "Type the study’s own time span, such as 12 months: only from it can risks be "
     "carried to another one.",
@@ -118,6 +120,16 @@ GAP_TEXTS = {
     "other-span-pairs": "Over another time span this has no interval: both sides are the same people, and the limits "
     "of the two risks alone do not tell it.",
     "baseline-unreadable": "The starting risk cannot be read; 12% or 12 in 100 would do.",
+    "low-above-usual": "The low risk lies above the usual one; check which is which.",
+    "high-below-usual": "The high risk lies below the usual one; check which is which.",
+    "low-above-high": "The low risk lies above the high one; check which is which.",
+    "high-below-low": "The high risk lies below the low one; check which is which.",
+    "solved-beyond-one": "With this overall risk and share, the risk of one of the two groups would pass 100%.",
+    "solved-beyond-one-odds": "With this overall risk and share, the risk of one of the two groups would pass 100%; "
+    "the odds ratio can be carried instead.",
+    "solved-beyond-zero": "With this overall risk and share, the risk of one of the two groups would fall below 0%.",
+    "solved-beyond-zero-odds": "With this overall risk and share, the risk of one of the two groups would fall below "
+    "0%; the odds ratio can be carried instead.",
     "carried-gap": "The effect to be carried has no value in this table, so nothing follows for a patient.",
     "undetermined-at-baseline": "An infinite effect says nothing at a starting risk of 0%, nor an odds ratio of 0 "
     "at one of 100%.",
@@ -143,11 +155,6 @@ UNKNOWN_MARK = "{text}: this cannot be read"
 def gap_text(gap: Gap) -> str:
     """One sentence that says why a figure is not given, and what would help where something would."""
     return told(GAP_TEXTS.get(gap.key, UNKNOWN_GAP), gap.facts)
-
-
-def why_no_patient(gap: Gap, form: Form, measure: str) -> str:  # noqa: ARG001
-    """Why nothing is carried to one patient."""
-    return gap_text(gap)
 
 
 def limit_text(gap: Gap) -> str:

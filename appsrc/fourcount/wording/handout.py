@@ -61,11 +61,11 @@ def handout_words(
 ) -> HandoutWords:
     """``denominators``, ``sentences`` and ``persons`` are those of the outcomes on the page; this room has no clock.
 
-    ``persons`` says of each whether its people are drawn as figures, and not as marks.
+    ``persons`` says of each that is drawn as people whether they are figures, and not marks.
     """
     title = names.bare(record.title_text)
     heading = _heading([subject(outcome) for outcome, _ in pages], title)
-    each = EACH_FIGURE if all(persons) else EACH_FIGURE_OR_MARK if any(persons) else EACH_MARK
+    each = {(True,): EACH_FIGURE, (False,): EACH_MARK, (): ""}.get(tuple(set(persons)), EACH_FIGURE_OR_MARK)
     lead = " ".join(part for part in (each, _metric(denominators)) if part)
     return HandoutWords(
         title=title or heading,

@@ -242,7 +242,7 @@ HELP_LETTERS = "The letters in the formulas"
 HELP_LIMITS = "What this program leaves out, and what it is for"
 NO_KEYS = "menu only"
 
-MISSING = "Still to be named: {names}."
+MISSING = "Still to be filled in: {names}."
 
 
 def window_title(name: str) -> str:

@@ -17,11 +17,23 @@ WITHHELD_ENDS = {
     "beyond-zero": "below 0%",
     "carried-beyond-zero": "below 0%",
 }
-"""Where a withheld limit would lie, by the reason; nobody is to read it as unlimited."""
+"""Where a withheld limit of a risk would lie, by the reason; nobody is to read it as unlimited."""
+
+PASSING = {
+    "beyond-one": "would pass 100%",
+    "formula-beyond-one": "would pass 100%",
+    "beyond-zero": "would fall below 0%",
+    "carried-beyond-zero": "would fall below 0%",
+}
+"""What the risk would do at such a limit."""
+
+OPEN_END = "an open end"
+"""Such a limit of a difference or of a ratio: it is the risk that would pass an end, not they."""
 
 A_WITHHELD_LIMIT = "a withheld limit"
-LIMIT_WITHHELD = "limit withheld"
-LIMIT_IS_WITHHELD = "limit is withheld"
+LIMIT_NOT_GIVEN = "limit not given"
+AT_THE_OTHER = "at the other limit the risk {passing}"
+NO_OTHER = "the other limit is not given"
 FEWER = "fewer"
 MORE = "more"
 LOWER = "lower"
@@ -77,7 +89,7 @@ def ratio_interval(interval: AnyInterval, estimate: float | Gap) -> str:
     def write(x: float) -> str:
         return numbers.ratio_limit(x, x if isinstance(estimate, Gap) else estimate)
 
-    return f"{_limit(interval.low, write)}{numbers.TO}{_limit(interval.high, write)}"
+    return f"{_open(interval.low, write)}{numbers.TO}{_open(interval.high, write)}"
 
 
 def difference_interval(interval: AnyInterval, estimate: float | Gap) -> str:
@@ -118,44 +130,46 @@ def sided(interval: AnyInterval, estimate: float | Gap, write: Callable[[float],
     ends = (-1.0 if isinstance(low, Gap) else low, 1.0 if isinstance(high, Gap) else high)
     if not isinstance(estimate, Gap) and estimate and all(x * estimate >= 0 for x in ends):
         first, second = (low, high) if estimate > 0 else (high, low)
-        return f"{_limit(first, write)}{numbers.TO}{_limit(second, write)}"
+        return f"{_open(first, write)}{numbers.TO}{_open(second, write)}"
 
     def with_word(x: float) -> str:
         return f"{write(x)} {side(x)}" if x else write(x)
 
-    return f"{_limit(low, with_word)}{numbers.TO}{_limit(high, with_word)}"
+    return f"{_open(low, with_word)}{numbers.TO}{_open(high, with_word)}"
 
 
 def number_needed_interval(needed: AnyNumberNeeded) -> str:
     """``9 to 31``, or ``NNTB 12 to ∞ to NNTH 40`` where the difference's interval holds no effect.
 
-    A limit that is withheld is said to be: ``up to 28; the lower limit is withheld``.
+    Of a limit that is not given it says why: ``up to 28; at the other limit the risk would pass 100%``.
     """
     low, high = needed.low, needed.high
+    if isinstance(low, Gap) and isinstance(high, Gap):
+        return ""
     if needed.through_infinity:
         return _through_infinity(needed)
     if isinstance(low, Gap):
-        return f"up to {_value(high)}; the lower {LIMIT_IS_WITHHELD}"
+        return f"up to {_value(high)}; {_other(low)}"
     if isinstance(high, Gap):
-        return f"from {_value(low)}; the upper {LIMIT_IS_WITHHELD}"
+        return f"from {_value(low)}; {_other(high)}"
     if needed.kind == low.kind == high.kind:
         return f"{numbers.number_needed(low.value)}{numbers.TO}{numbers.number_needed(high.value)}"
     return f"{_needed(low)}{numbers.TO}{_needed(high)}"
 
 
 def _through_infinity(needed: AnyNumberNeeded) -> str:
-    """``NNTB 12 to ∞ to NNTH 40``; of a withheld limit the kind alone: ``NNTB 3 to ∞ to NNTH, limit withheld``."""
+    """``NNTB 12 to ∞ to NNTH 40``; of a withheld limit the kind alone: ``NNTB 3 to ∞ to NNTH, limit not given``."""
     low, high = needed.low, needed.high
     near = "NNTH" if needed.kind == "NNTH" else "NNTB"
     far = "NNTB" if needed.kind == "NNTH" else "NNTH"
-    first = f"{near}, {LIMIT_WITHHELD}," if isinstance(low, Gap) else _needed(low)
-    last = f"{far}, {LIMIT_WITHHELD}" if isinstance(high, Gap) else _needed(high)
+    first = f"{near}, {LIMIT_NOT_GIVEN}," if isinstance(low, Gap) else _needed(low)
+    last = f"{far}, {LIMIT_NOT_GIVEN}" if isinstance(high, Gap) else _needed(high)
     return numbers.TO.join((first, numbers.INFINITY, last))
 
 
 def withheld_needed(needed: AnyNumberNeeded) -> str:
     """Why one limit of a number needed is not given, or ""."""
-    return " ".join(limit_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap))
+    return " ".join(dict.fromkeys(limit_text(limit) for limit in (needed.low, needed.high) if isinstance(limit, Gap)))
 
 
 def relative(ratio: float, link: str = " ") -> str:
@@ -174,12 +188,12 @@ def relative_interval(interval: AnyInterval, ratio: float) -> str:
     ends = [x - 1 for x in (low, high) if not isinstance(x, Gap)]
     if ratio != 1 and all(x * (ratio - 1) >= 0 for x in ends):
         first, second = (low, high) if ratio > 1 else (high, low)
-        return f"{_limit(first, _part)}{numbers.TO}{_limit(second, _part)}"
+        return f"{_open(first, _part)}{numbers.TO}{_open(second, _part)}"
 
     def with_word(x: float) -> str:
         return f"{_part(x)} {LOWER if x < 1 else HIGHER}" if x != 1 else _part(x)
 
-    return f"{_limit(low, with_word)}{numbers.TO}{_limit(high, with_word)}"
+    return f"{_open(low, with_word)}{numbers.TO}{_open(high, with_word)}"
 
 
 def bracketed(text: str) -> str:
@@ -199,8 +213,17 @@ def _limit(limit: float | Gap, write: Callable[[float], str]) -> str:
     return WITHHELD_ENDS.get(limit.key, A_WITHHELD_LIMIT) if isinstance(limit, Gap) else write(limit)
 
 
+def _open(limit: float | Gap, write: Callable[[float], str]) -> str:
+    """A limit of a difference or a ratio; where the risk would pass an end, there is none."""
+    return OPEN_END if isinstance(limit, Gap) and limit.key in WITHHELD_ENDS else _limit(limit, write)
+
+
+def _other(limit: Gap) -> str:
+    return AT_THE_OTHER.format(passing=PASSING[limit.key]) if limit.key in PASSING else NO_OTHER
+
+
 def _value(limit: NumberNeededLimit | Gap) -> str:
-    return LIMIT_WITHHELD if isinstance(limit, Gap) else numbers.number_needed(limit.value)
+    return LIMIT_NOT_GIVEN if isinstance(limit, Gap) else numbers.number_needed(limit.value)
 
 
 def _needed(limit: NumberNeededLimit | Gap) -> str:

@@ -4,7 +4,6 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING, Literal
 
-from fourcount.record.editing import count_other_outcome
 from fourcount.record.outcome import (
     Column,
     Design,
@@ -28,6 +27,7 @@ STAND_INS = {"index": "index group", "reference": "reference group"}
 SIDES: dict[Design, dict[Position, str]] = {
     "matched": {"first": "cases", "second": "controls"},
     "before-after": {"first": "after", "second": "before"},
+    "paired": {"first": "first side", "second": "second side"},
 }
 """What the sides of pairs are by their design; the grid calls them so too."""
 
@@ -44,6 +44,7 @@ EXPOSED: dict[Column, str] = {"left": "was exposed", "right": "was not exposed"}
 NAMED_EVENT = "had the event “{heading}”"
 WITHOUT = "did not have the outcome “{outcome}”"
 DID_NOT = "did not"
+ALL_OTHERS = "all others"
 VERBS = ("did", "had", "was", "were", "got")  # a heading that begins so is a sentence's words already
 NOT_COUNTED = (Pairs, PersonTime, RiskAtTime, EffectOnly)
 """Tables whose figures are not shares of people who were followed alike."""
@@ -96,6 +97,8 @@ def in_group(outcome: Outcome, group: Group) -> str:
         return within if _is_time(within) else f"in the period “{label(outcome, group)}”"
     if _by_case(outcome) and within.lower() in SIDES["matched"].values():
         return f"among {within}"
+    if unnamed_side(outcome, group):
+        return f"on the {within}"
     if not labelled(outcome, group):
         return f"in the {STAND_INS[group]}"
     if within.lower().startswith(WHO):
@@ -103,6 +106,11 @@ def in_group(outcome: Outcome, group: Group) -> str:
     if outcome.design in WITH_DESIGNS:
         return f"with {within}"
     return f"in the group “{label(outcome, group)}”"
+
+
+def unnamed_side(outcome: Outcome, group: Group) -> bool:
+    """Whether this is a side of pairs that nobody has named, and that the design has no name for."""
+    return outcome.design == "paired" and isinstance(outcome.table, Pairs) and not labelled(outcome, group)
 
 
 def by_time(outcome: Outcome) -> bool:
@@ -122,7 +130,7 @@ def _by_case(outcome: Outcome) -> bool:
 def _stand_in(outcome: Outcome, group: Group) -> str:
     """An unnamed group: its side where the design tells it."""
     sides = SIDES.get(outcome.design)
-    if sides is None or (outcome.design == "matched" and not _by_case(outcome)):
+    if sides is None or (outcome.design != "before-after" and not isinstance(outcome.table, Pairs | EffectOnly)):
         return STAND_INS[group]
     return sides["first" if (group == "index") == (outcome.index_group == "first") else "second"]
 
@@ -159,8 +167,16 @@ def event_key(outcome: Outcome) -> str:
 
 
 def other_key(outcome: Outcome) -> str:
-    """The other outcome in a picture's key, where a bare "did not" would say nothing."""
-    return event_key(count_other_outcome(outcome))
+    """The other outcome in a picture's key, beside that of the event; only of nouns is it said what people lack."""
+    heading, words = bare(outcome.other_heading_text), bare(outcome.other_words_text)
+    if heading:
+        return event_names.without_unit(heading)
+    if words:
+        return event_names.of_people(words) or words
+    event = _event_name(outcome)
+    if event:
+        return event_names.lacked_by(event) or ALL_OTHERS
+    return _stand_ins(outcome)[_other_column(outcome)]
 
 
 def _unnamed_event(outcome: Outcome) -> str:
@@ -195,6 +211,16 @@ def _other_column(outcome: Outcome) -> Column:
     return "right" if outcome.counted == "left" else "left"
 
 
+def span(outcome: Outcome) -> str:
+    """The study's time span without a preposition where it is one, else as typed: "12 months", "median 2 years"."""
+    typed = bare(outcome.span_text)
+    if not typed:
+        return ""
+    from fourcount.wording.durations import span_said  # an empty window needs none of it
+
+    return span_said(typed)
+
+
 def within_span(outcome: Outcome) -> str:
     """The time span after a verb: "within 12 months", or "" where none was typed; a survey has no "within"."""
     return within(_common_span(outcome), outcome)
@@ -208,8 +234,8 @@ def within(span: str, outcome: Outcome) -> str:
 
 
 def over_span(outcome: Outcome) -> str:
-    """The time span under a figure: "over 12 months", or "" where none was typed."""
-    return over(_common_span(outcome))
+    """The time span under a figure: "over 12 months", or "" where none was typed; a survey's is when it was done."""
+    return _common_span(outcome) if outcome.design == "survey" else over(_common_span(outcome))
 
 
 def over(span: str) -> str:
@@ -220,7 +246,7 @@ def over(span: str) -> str:
 def _common_span(outcome: Outcome) -> str:
     """The time for which everybody was followed; counts of people followed for different times have none."""
     varied = outcome.follow_up_varied and not isinstance(outcome.table, NOT_COUNTED)
-    return "" if varied else bare(outcome.span_text)
+    return "" if varied else span(outcome)
 
 
 def _begins_with_preposition(span: str) -> bool:

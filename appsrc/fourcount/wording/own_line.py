@@ -21,7 +21,8 @@ MARGIN = {
     "across": "lies on both sides of your margin of {value}: it holds effects better and effects worse than the margin",
 }
 BY = {"margin-score": "Miettinen–Nurminen", "margin-printed": "from the interval"}
-MARK = "Flag: your {kind}, {value}."
+MARK = "The flag is your {kind}, {value}."
+ON_THE_BETTER_SIDE = " (itself better than no effect)"
 PARTED = " The interval rests on another method than the p, and here the two disagree."
 KINDS = {"matters": "line", "margin": "margin"}
 
@@ -44,7 +45,8 @@ def line_sentence(outcome: Outcome, line: OwnLine) -> str:
     if line.kind == "matters":
         return f"{subject} {MATTERS[line.lies].format(value=value_text(line))}."
     side = "across" if line.lies == "across" else _side(line)
-    return f"{subject} {MARGIN[side].format(value=value_text(line))}{_p(line)}{PARTED if line.parted else ''}"
+    value = value_text(line) if line.worse_side else f"{value_text(line)}{ON_THE_BETTER_SIDE}"
+    return f"{subject} {MARGIN[side].format(value=value)}{_p(line)}{PARTED if line.parted else ''}"
 
 
 def value_text(line: OwnLine) -> str:

@@ -2,13 +2,14 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterable
 from dataclasses import dataclass
 
 from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import carried, limits, names, numbers, spans, starts
-from fourcount.wording.basis import OWN_RANGE, basis, range_note
+from fourcount.wording.basis import OWN_RANGE, basis, half_added_note, not_crude_note, range_note
 from fourcount.wording.form import patient_choices
 from fourcount.wording.gaps import gap_text
 from fourcount.wording.headline import DO_NOT_ADD_UP
@@ -17,6 +18,20 @@ from fourcount.wording.ranks import people_for_all, rank_lines
 from fourcount.wording.subject import BECAME_CASES, UNNAMED, subject
 
 __all__ = ["DO_NOT_ADD_UP", "WHICH_PEOPLE", "PatientWords", "missing", "patient_words", "picture_heading"]
+
+
+FIELDS_OF = {
+    "the event": "what happens to them (“People who”)",
+    "the reference group": "the name of the reference group",
+    "the index group": "the name of the index group",
+    "the time span": "“Time span”",
+}
+FIELDS_OF_CASES = {
+    **dict.fromkeys(("the reference group", "the index group"), "what people were exposed to (“People who”)"),
+    "the event": "the name of the cases, by what they have",
+    "the time span": "“Time span”",
+}
+"""A patient of a matched case-control study becomes a case or not, exposed or not."""
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
@@ -53,7 +68,8 @@ def patient_words(
     without_title, with_title = titles(outcome)
     if isinstance(patient, Gap):
         why = gap_text(patient)
-        return PatientWords(without_title=without_title, with_title=with_title, detail=why, missing=missing(outcome))
+        lacks = missing_fields(outcome)
+        return PatientWords(without_title=without_title, with_title=with_title, detail=why, missing=lacks)
     people = denominator or people_for_all(patient)
     patient = starts.at_one_level(patient, choices)
     choices = patient_choices(findings, choices)
@@ -71,7 +87,7 @@ def patient_words(
         detail=_detail(outcome, patient, findings, people),
         basis=basis(outcome, patient, choices),
         ranks=rank_lines(outcome, findings, choices, people_for_all(patient, people)),
-        missing=missing(outcome),
+        missing=missing_fields(outcome),
         picture_sentence=picture_sentence(outcome, findings, patient, choices, people),
     )
 
@@ -84,7 +100,13 @@ def titles(outcome: Outcome) -> tuple[str, str]:
         return names.sentence_case(labels[0]), names.sentence_case(labels[1])
     if spoken is not outcome:
         return names.sentence_case(names.label(spoken, "reference")), names.sentence_case(names.label(spoken, "index"))
-    return f"Without: {names.label_within(spoken, 'reference')}", f"With: {names.label_within(spoken, 'index')}"
+    return _titled("Without", spoken, "reference"), _titled("With", spoken, "index")
+
+
+def _titled(word: str, outcome: Outcome, group: names.Group) -> str:
+    """The group behind its word; a side of pairs that nobody has named is neither with nor without."""
+    within = names.label_within(outcome, group)
+    return names.sentence_case(within) if names.unnamed_side(outcome, group) else f"{word}: {within}"
 
 
 def picture_heading(record: Record, outcome: Outcome) -> str:
@@ -101,9 +123,15 @@ def missing(outcome: Outcome) -> tuple[str, ...]:
         "the event": event not in ("", BECAME_CASES),
         "the reference group": spoken.reference_label_text.strip() not in ("", *UNNAMED),
         "the index group": spoken.index_label_text.strip() not in ("", *UNNAMED),
-        "the time span": spoken.span_text.strip() != "",
+        "the time span": names.span(spoken) != "",
     }
     return tuple(name for name, is_named in named.items() if not is_named)
+
+
+def missing_fields(outcome: Outcome, lacks: Iterable[str] | None = None) -> tuple[str, ...]:
+    """The fields in which that is typed, as the window calls them; ``lacks`` are those of it that are asked for."""
+    fields = FIELDS_OF_CASES if subject(outcome) is not outcome else FIELDS_OF
+    return tuple(dict.fromkeys(fields[item] for item in (missing(outcome) if lacks is None else lacks)))
 
 
 def _levelled(interval: str, choices: Choices) -> str:
@@ -113,7 +141,7 @@ def _levelled(interval: str, choices: Choices) -> str:
 def _change_said(outcome: Outcome, difference: Figure, people: int) -> str:
     """``6 fewer in 100 fell at least once``."""
     change = carried.change(difference, people)
-    return f"{change} {names.event_words(outcome)}" if change else ""
+    return names.sentence_case(f"{change} {names.event_words(outcome)}") if change else ""
 
 
 def _summary(outcome: Outcome, patient: PatientFindings, choices: Choices, people: int) -> str:
@@ -127,10 +155,10 @@ def _detail(outcome: Outcome, patient: PatientFindings, findings: OutcomeFinding
     """What stands under the summary: number needed, relative words, and what the interval leaves out."""
     if isinstance(patient.with_.estimate, Gap):
         return carried.reason(patient.with_.estimate, patient, findings)
-    sentences = [carried.number_needed(patient.number_needed, outcome), carried.relative_words(patient)]
+    sentences = [carried.number_needed(patient.number_needed, outcome), carried.relative_words(outcome, patient)]
     sentences += carried.reasons(patient, findings)
     note = range_note(outcome, patient)
-    sentences += [note] if note != OWN_RANGE else []
+    sentences += [note if note != OWN_RANGE else "", half_added_note(patient), not_crude_note(outcome, patient)]
     if not _adds_up(patient, people):
         sentences.append(DO_NOT_ADD_UP)
     return " ".join(part for part in dict.fromkeys(sentences) if part)

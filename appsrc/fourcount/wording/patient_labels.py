@@ -16,7 +16,7 @@ START_NOTES = {
     "one": "one, as 12% or 24 of 200",
     "three": "low, usual and high beside each other",
     "rate": "as 12 per 1,000 person-years",
-    "overall": "of exposed and unexposed together",
+    "overall": "of people with and without it together",
 }
 START_KIND = "How the starting risk is given"
 
@@ -26,7 +26,7 @@ START_FIELDS = {
     "high_risk_text": "High starting risk",
     "rate_text": "Rate without",
     "overall_risk_text": "Risk of everybody",
-    "exposed_share_text": "Share of people exposed",
+    "exposed_share_text": "Share of people who have it",
 }
 """Names for a screen reader."""
 
@@ -35,7 +35,7 @@ START_HEADS = {
     "starting_risk_text": "usual",
     "high_risk_text": "high",
     "overall_risk_text": "of everybody",
-    "exposed_share_text": "share exposed",
+    "exposed_share_text": "share who have it",
 }
 """Over the fields, where there is more than one."""
 
@@ -119,7 +119,6 @@ OUTCOMES_FULL = "A paper holds 200 outcomes at most."
 TABLE_HEADS = {"without": "without", "with": "with", "difference": "difference", "needed": "NNT"}
 TABLE_NAME = "The picture’s numbers"
 TABLE_CORNER = "in {people}"
-TABLE_ROW = "{label}: {figures}."
 
 OWN_LINE = "A line of your own"
 OWN_LINE_CLOSE = "Close the line of your own"

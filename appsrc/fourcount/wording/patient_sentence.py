@@ -6,7 +6,7 @@ from fourcount.appraisal.findings import Figure, Gap, OutcomeFindings, PatientFi
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import carried, limits, names, numbers, of_people, spans, starts
-from fourcount.wording.basis import OWN_RANGE, range_note
+from fourcount.wording.basis import OWN_RANGE, half_added_note, range_note
 from fourcount.wording.form import patient_choices
 from fourcount.wording.ranks import people_for_all, rank_lines
 from fourcount.wording.subject import subject
@@ -30,9 +30,10 @@ def patient_sentence(outcome: Outcome, findings: OutcomeFindings, choices: Choic
         return " ".join((f"{_without(outcome, patient, choices, people)}.", reason, *ranks))
     told = patient.number_needed == findings.measures.get("number_needed")  # a design without one has said so already
     needed = "" if told else carried.number_needed(patient.number_needed, outcome)
-    relative = "" if patient.effect == "risk_ratio" and patient.other_span is None else carried.relative_words(patient)
+    repeated = patient.effect == "risk_ratio" and patient.other_span is None
+    relative = "" if repeated else carried.relative_words(outcome, patient)
     note = range_note(outcome, patient)
-    more = (*carried.reasons(patient, findings), "" if note == OWN_RANGE else note, *ranks)
+    more = (*carried.reasons(patient, findings), "" if note == OWN_RANGE else note, half_added_note(patient), *ranks)
     return " ".join(part for part in (_compared(outcome, patient, choices, people), needed, relative, *more) if part)
 
 

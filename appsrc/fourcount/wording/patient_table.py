@@ -16,6 +16,7 @@ from fourcount.wording.ranks import people_for_all
 START = "Starting {risk}"
 DIFFERENCE = "Difference"
 NUMBER_NEEDED = "Number needed"
+ROW = "{label}: {figures}."
 
 
 class Row(NamedTuple):
@@ -59,6 +60,17 @@ def patient_table_head(
     counted = f"{span}, in {numbers.whole(people_for_all(patient, denominator))} ({level})"
     needed = f"{NUMBER_NEEDED} ({level})"
     return Row(start, f"{without}{counted}", f"{with_}{counted}", f"{DIFFERENCE}{counted}", needed)
+
+
+def rows_sentence(rows: list[Row], head: Row) -> str:
+    """The whole table read out: each cell behind its head, and a reason by itself."""
+    return " ".join(ROW.format(label=row.label, figures=_read_out(row, head).removesuffix(".")) for row in rows)
+
+
+def _read_out(row: Row, head: Row) -> str:
+    if not row.with_:
+        return row.without
+    return ", ".join(f"{name}: {cell}" for name, cell in zip(head[1:], row[1:], strict=True) if cell)
 
 
 def _row(rank: str, patient: PatientFindings | Gap, findings: OutcomeFindings, people: int) -> Row:

@@ -33,7 +33,7 @@ BARS = "So many of 1,000 are read more exactly as bars."
 
 BAR_END = "The bars run to {end}, not to 100%."
 EITHER_WAY = "{words} either way"
-OPEN = "left open by the interval"
+OPEN = "not settled by the study"
 INTERVAL_DRAWN = "{group}: {interval} {low} to {high} in {people}."
 NO_INTERVAL = "The interval has no limit on one side here, so it is not drawn."
 
@@ -162,7 +162,7 @@ def _key(outcome: Outcome, asked: Asked, said: Said) -> tuple[KeyEntry, ...]:
     event, other = (other, event) if said.turned else (event, other)
     event, other = said.event or event, said.other or other
     if asked.arrangement == "one":
-        event, other = EITHER_WAY.format(words=event), EITHER_WAY.format(words=other)
+        event, other = _either_way(event), _either_way(other)
     return (
         KeyEntry("affected", event),
         KeyEntry("added", said.added or _changed("added", outcome, said)),
@@ -170,6 +170,11 @@ def _key(outcome: Outcome, asked: Asked, said: Said) -> tuple[KeyEntry, ...]:
         KeyEntry("avoided", said.avoided or _changed("avoided", outcome, said)),
         KeyEntry("others", other),
     )
+
+
+def _either_way(words: str) -> str:
+    """Of one picture for both groups; who is left when all states are named is that either way."""
+    return words if words == names.ALL_OTHERS else EITHER_WAY.format(words=words)
 
 
 def _changed(verb: str, outcome: Outcome, said: Said) -> str:
@@ -186,8 +191,7 @@ def _notes(outcome: Outcome, drawn: Drawn, asked: Asked, said: Said, level: str,
     welcome = WELCOME_DRAWN if outcome.welcome and not said.turned and drawn.denominator else ""
     scale = ""
     if drawn.denominator is None:
-        least = min(side for risk in (drawn.without_risk, drawn.with_risk) for side in (risk, 1 - risk))
-        scale = TOO_CLOSE if least >= ONE_IN_THE_LARGEST else TOO_SMALL
+        scale = TOO_CLOSE if too_close(drawn) else TOO_SMALL
     elif drawn.denominator != 100 and asked.arrangement in EACH:
         scale = MORE_PEOPLE.format(picture=EACH[asked.arrangement], people=numbers.whole(drawn.denominator))
     bars = drawn.denominator is None or asked.arrangement not in EACH
@@ -195,6 +199,12 @@ def _notes(outcome: Outcome, drawn: Drawn, asked: Asked, said: Said, level: str,
     many = max(drawn.without_risk, drawn.with_risk) >= BARS_FROM and drawn.denominator == 1_000
     hint = BARS if many and asked.arrangement in EACH and said == USUAL_WORDS else ""
     return welcome, scale, hint, ends, _interval(outcome, drawn, asked, said, level)
+
+
+def too_close(drawn: Drawn) -> bool:
+    """Whether both risks could be drawn as people, and only the difference between them could not."""
+    least = min(side for risk in (drawn.without_risk, drawn.with_risk) for side in (risk, 1 - risk))
+    return least >= ONE_IN_THE_LARGEST
 
 
 def _interval(outcome: Outcome, drawn: Drawn, asked: Asked, said: Said, level: str) -> str:

@@ -9,12 +9,12 @@ from __future__ import annotations
 
 from typing import NamedTuple
 
-from fourcount.appraisal.findings import Gap, PatientFindings
+from fourcount.appraisal.findings import PatientFindings
 from fourcount.record.outcome import Certainty, Outcome
-from fourcount.wording import event_names, names, numbers, of_people, plain, plain_texts, spans, starts
+from fourcount.wording import event_names, names, numbers, of_people, plain, plain_starts, plain_texts, spans
 from fourcount.wording.picture_sentence import WHICH_PEOPLE
 from fourcount.wording.plain_groups import group_phrase, group_title
-from fourcount.wording.plain_risks import PlainRisks, people_in_text, plain_risks
+from fourcount.wording.plain_risks import PlainRisks
 from fourcount.wording.subject import subject
 
 
@@ -32,8 +32,8 @@ class PlainWords(NamedTuple):
     """All that one outcome's page says; what does not hold is "".
 
     ``who`` goes behind the title where other pages beside this one show other people, in place of ``lead``.
-    ``turned`` says which side is drawn where ``summary`` speaks of the other. ``open_`` and ``doubt`` belong to
-    ``summary``. ``certainty`` is always there.
+    ``turned`` says which side is drawn where ``summary`` speaks of the other. ``open_``, ``rounded`` and ``doubt``
+    belong to ``summary``. ``certainty`` is always there.
     """
 
     title: str
@@ -44,10 +44,9 @@ class PlainWords(NamedTuple):
     with_: PlainSide
     event: str
     other: str
-    avoided: str
-    added: str
     summary: str
     open_: str
+    rounded: str
     doubt: str
     which: str
     certainty: str
@@ -55,17 +54,17 @@ class PlainWords(NamedTuple):
     relative: str
     other_starts: tuple[str, ...]
     study: str
-    rounded: str
 
-    @property
-    def sentence(self) -> str:
-        """The whole page as one text, for those who hear it."""
+    def told(self, *, ranged: bool = False, printed: bool = False) -> str:
+        """The whole page as one text, for those who hear it; with the range, and with what only print says."""
         sides = [
             f"{side.title}, {side.number} {side.percent} {side.event}, and {side.other}."
             for side in (self.without, self.with_)
         ]
-        before = (f"{self.title}.", self.lead, self.turned, *sides)
-        parts = (*before, self.summary, self.open_, self.doubt, self.which, self.certainty, self.study)
+        before = (f"{self.title}.", self.lead, self.turned, *sides, self.range_ if ranged else "")
+        more = (self.relative, *self.other_starts) if printed else ()
+        after = (self.summary, self.open_, self.rounded, self.doubt, self.which, self.certainty)
+        parts = (*before, *after, *more, self.study)
         return " ".join(part for part in parts if part)
 
 
@@ -97,27 +96,26 @@ def plain_words(outcome: Outcome, patient: PatientFindings, risks: PlainRisks, p
     change = Change(other, -risks.difference, people) if flips else Change(event, risks.difference, people)
     index = group_phrase(outcome, "index")
     drawn = plain_texts.DRAWN.format(event=event) if flips else ""
+    start = plain_starts.Told(turned, "" if plain.is_negative(other) else plain_texts.DRAWN.format(event=other))
     return PlainWords(
         title=title(outcome, patient, event),
-        who=_who(patient, risks, people),
-        lead=_lead(patient, risks, people),
+        who=plain_starts.who(patient, start, people),
+        lead=plain_starts.lead(patient, start, people),
         turned=plain_texts.TURNED.format(event=event) if flips else "",
         without=_side(outcome, "reference", risks.without, people, event, other),
         with_=_side(outcome, "index", risks.with_, people, event, other),
         event=event,
         other=other,
-        avoided=_changed(change) if risks.difference < 0 else "",
-        added=_changed(change) if risks.difference > 0 else "",
         summary=_summary(change, index),
-        open_=plain_texts.OPEN if risks.reach_no_effect else "",
+        open_=_open(risks),
+        rounded="" if _adds_up(risks, people) else plain_texts.ROUNDED,
         doubt=_doubt(outcome, risks),
         which=WHICH_PEOPLE,
         certainty=certainty_text(outcome.certainty, change, index),
         range_=_range(risks, people, index, drawn),
         relative=_relative(risks, people, drawn),
-        other_starts=_other_starts(patient, turned, people, index, drawn),
+        other_starts=plain_starts.others(patient, start, people, index, group_phrase(outcome, "reference")),
         study=_study(outcome, patient),
-        rounded="" if _adds_up(risks, people) else plain_texts.ROUNDED,
     )
 
 
@@ -131,7 +129,7 @@ def span(outcome: Outcome, patient: PatientFindings) -> str:
     """The time with its preposition, "in 12 months": the other time span where one is asked for."""
     if patient.other_span is not None:
         return in_time(spans.duration(patient.other_span))
-    return "" if _times_differ(outcome) else in_time(names.bare(outcome.span_text))
+    return "" if _times_differ(outcome) else in_time(names.span(outcome))
 
 
 def in_time(text: str) -> str:
@@ -178,10 +176,12 @@ def _summary(change: Change, index: str) -> str:
     return names.sentence_case(said)
 
 
-def _changed(change: Change) -> str:
-    """What the key calls the people between both groups: the very number of the summary."""
-    pattern = plain_texts.CHANGED if len(change.event) <= plain_texts.LONGEST_KEY else plain_texts.CHANGED_ALONE
-    return pattern.format(number=change.number, side=change.way, event=change.event)
+def _open(risks: PlainRisks) -> str:
+    """What the study leaves open: no difference where there is one, and a difference where there is none."""
+    if risks.reach_no_effect:
+        return plain_texts.OPEN
+    ways = risks.open_ways
+    return plain_texts.OPEN_EITHER_WAY if all(ways) else plain_texts.OPEN_ONE_WAY if any(ways) else ""
 
 
 def _doubt(outcome: Outcome, risks: PlainRisks) -> str:
@@ -190,26 +190,6 @@ def _doubt(outcome: Outcome, risks: PlainRisks) -> str:
     if not why or risks.difference == 0:
         return f"{names.sentence_case(why)}." if why else ""
     return plain_texts.DOUBT.format(why=why)
-
-
-def _like_the_study(patient: PatientFindings) -> bool:
-    """Whether these are people like the study's: at its own starting risk, over its own time, by whichever effect."""
-    return starts.own(patient) and patient.other_span is None
-
-
-def _lead(patient: PatientFindings, risks: PlainRisks, people: int) -> str:
-    """Who is drawn: people like the study's only where they are."""
-    if _like_the_study(patient):
-        return plain_texts.LIKE_THE_STUDY
-    return plain_texts.START_AT.format(count=of_people.affected(risks.without, people), people=numbers.whole(people))
-
-
-def _who(patient: PatientFindings, risks: PlainRisks, people: int) -> str:
-    """The same as a part of a head."""
-    if _like_the_study(patient):
-        return plain_texts.FOR_LIKE_THE_STUDY
-    count, everyone = of_people.affected(risks.without, people), numbers.whole(people)
-    return plain_texts.FOR_START_AT.format(count=count, people=everyone)
 
 
 def _adds_up(risks: PlainRisks, people: int) -> bool:
@@ -237,42 +217,19 @@ def _relative(risks: PlainRisks, people: int, drawn: str) -> str:
     word = "lower" if risks.difference < 0 else "higher"
     before, after = (of_people.affected(risk, people) for risk in (risks.without, risks.with_))
     percent = numbers.percent_whole(share)
-    said = plain_texts.RELATIVE.format(
-        before=before, after=after, people=numbers.whole(people), drawn=drawn, percent=percent, word=word
-    )
     rounded = [numbers.people(risk, people) for risk in (risks.without, risks.with_)]
     same = rounded[0] and numbers.percent_whole(abs(rounded[1] / rounded[0] - 1)) == percent
-    return said if same else f"{said} {plain_texts.BEFORE_ROUNDING}"
-
-
-def _other_starts(patient: PatientFindings, turned: bool, people: int, index: str, drawn: str) -> tuple[str, ...]:
-    """The same effect at the low and the high starting risk, where the reader gave three."""
-    lines = []
-    for other in (patient.low, patient.high):
-        risks = None if other is None or isinstance(other, Gap) else plain_risks(other, turned)
-        if risks is not None:
-            of = people if _apart_at(risks, people) else people_in_text(risks)
-            before, after = (of_people.affected(risk, of) for risk in (risks.without, risks.with_))
-            line = plain_texts.OTHER_START.format(
-                before=before, after=after, people=numbers.whole(of), index=index, drawn=drawn
-            )
-            lines.append(line)
-    return tuple(lines)
-
-
-def _apart_at(risks: PlainRisks, people: int) -> bool:
-    """Whether whole numbers of so many people tell both risks, and apart from each other."""
-    pair = (risks.without, risks.with_)
-    told = not any(of_people.hidden(risk, people) for risk in pair)
-    before, after = (numbers.people(risk, people) for risk in pair)
-    return told and (before != after or risks.difference == 0)
+    pattern = plain_texts.RELATIVE if same else plain_texts.RELATIVE_UNROUNDED
+    return pattern.format(
+        before=before, after=after, people=numbers.whole(people), drawn=drawn, percent=percent, word=word
+    )
 
 
 def _study(outcome: Outcome, patient: PatientFindings) -> str:
     """Where people were followed for different times, and where the risks are over another time than the study's."""
     said = []
     if _times_differ(outcome):
-        said.append(plain_texts.VARIED.format(span=f" ({names.bare(outcome.span_text)})"))
+        said.append(plain_texts.VARIED.format(span=f" ({names.span(outcome)})"))
     if patient.other_span is not None and patient.study_span is not None:
         ran, other = spans.duration(patient.study_span), spans.duration(patient.other_span)
         said.append(plain_texts.OTHER_SPAN.format(span=ran, other=other))

@@ -28,6 +28,13 @@ class PlainRisks(NamedTuple):
     with_ends: Ends = Ends()
 
     @property
+    def open_ways(self) -> tuple[bool, bool]:
+        """Whether the interval of a difference that is none reaches to fewer, and to more."""
+        low, high = self.apart
+        none = self.difference == 0
+        return none and low is not None and low < 0, none and high is not None and high > 0
+
+    @property
     def reach_no_effect(self) -> bool:
         """Whether the interval of the difference leaves open that there is none.
 

@@ -5,13 +5,7 @@ from __future__ import annotations
 from fourcount.record.outcome import Certainty, Design
 
 MISSING = "Before a patient is shown this, fill in {items}."
-ITEMS = {
-    "the event": "the event in words",
-    "the reference group": "the name of the reference group",
-    "the index group": "the name of the index group",
-    "the time span": "the time span",
-}
-OTHER_OUTCOME = "words for the people who do not have the welcome outcome"
+OTHER_OUTCOME = "“Plain words” for the people who do not have the welcome outcome"
 
 DO_NOT = "do not"
 HOW_MANY = "How many people {event}"
@@ -19,31 +13,39 @@ EACH_FIGURE = "Each figure is one person."
 EACH_MARK = "Each mark is one person."
 EACH_FIGURE_OR_MARK = "Each figure or mark is one person."
 LIKE_THE_STUDY = "These people are like those in the study."
-START_AT = "These people start at a risk of {count} in {people}."
+START_AT = "These people start at a risk of {start}."
+START_WELCOME = "These people start at {start}."
 FOR_LIKE_THE_STUDY = "for people like those in the study"
-FOR_START_AT = "for people who start at {count} in {people}"
+FOR_START_AT = "for people who start at {start}"
+START = "{count} in {people}{who}{over}"
+OVER = " over {span}"
 HEAD = "{title}, {who}"
 CHANGE = "{index}, {number} {side} of these {people} {event}."
-SAME = "There is no difference: the same number of these {people} {event}."
+SAME = "Going by the study, the same number of these {people} {event}."
 TURNED = "The filled ones are people who {event}."
 DRAWN = " who {event}"
-ROUNDED = "Numbers are rounded, so they may not add up."
+ROUNDED = "Numbers are rounded to whole people; the difference is worked out before."
 TOO_SMALL = "The risks are too small to draw as people."
+TOO_CLOSE = "The difference is too small to draw as people."
 EACH_PICTURE = "Each picture shows {people} people."
-EITHER = "could go either way"
 EITHER_WAY = "{words}, with both"
 """What the key says where one array shows both groups."""
 
-CHANGED = "the {number} {side} who {event}"
-CHANGED_ALONE = "the {number} {side}"
-"""The key of figures that make the difference, in the words of the sentence that says it; and of a long event."""
+AVOIDED, ADDED = "spared, on balance", "added, on balance"
+"""The key of figures that make the difference, without a number: fewer are drawn where the range takes their place."""
 
-LONGEST_KEY = 40
 OPEN = "The study leaves open that there is no difference."
+OPEN_EITHER_WAY = "The study leaves open a difference either way."
+OPEN_ONE_WAY = "The study leaves open that there is a difference."
 RANGE = "{index}, it could be from {low} to {high} in {people}{drawn}."
+NO_RANGE = "A range cannot be given here."
 RELATIVE = "Going from {before} to {after} in {people}{drawn} is also called “{percent} {word}”."
-BEFORE_ROUNDING = "(That is worked out before rounding.)"
-OTHER_START = "For people who start at {before} in {people}, it is {after} in {people}{drawn} {index}."
+RELATIVE_UNROUNDED = (
+    "Going from {before} to {after} in {people}{drawn} is also called “{percent} {word}” "
+    "(worked out before rounding to whole people)."
+)
+OTHER_START = "For people who start at {start}, it is {after} in {people} {index}."
+OTHER_START_OVER = "For people who start at {start}, it is {before} in {people} {reference} and {after} {index}."
 
 CERTAINTY_NAMES: dict[Certainty, str] = {
     "": "How sure the evidence is: not rated.",

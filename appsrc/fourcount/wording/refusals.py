@@ -67,7 +67,7 @@ FIELD_NAMES = {
     "high_risk_text": "high starting risk",
     "rate_text": "rate",
     "overall_risk_text": "overall risk",
-    "exposed_share_text": "share of people exposed",
+    "exposed_share_text": "share of people who have it",
     "other_span_text": "other time span",
 }
 """What the window calls each text; anything else in a file is named as the file names it."""

@@ -3,16 +3,13 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import PatientFindings
-from fourcount.record.entry.readings import Duration
 from fourcount.record.outcome import Outcome
-from fourcount.wording import names, numbers
+from fourcount.wording import names
+from fourcount.wording.durations import duration
+
+__all__ = ["carried_to", "duration", "of_the_start", "over", "within"]
 
 CARRIED_TO = "carried to {other} as if hazards stayed constant"
-
-
-def duration(span: Duration) -> str:
-    """``12 months``, ``1 year``."""
-    return f"{numbers.quantity(span.value)} {span.unit}{'' if span.value == 1 else 's'}"
 
 
 def over(outcome: Outcome, patient: PatientFindings) -> str:

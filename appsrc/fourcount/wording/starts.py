@@ -11,11 +11,13 @@ from fourcount.record.entry.starting import read_share, read_starting_risk
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording import limits, names, numbers, spans
+from fourcount.wording.subject import subject
 
 OWN = "the study’s own starting {risk}"
+SHARE = "Share of people {group}"
 OWN_ROW = "the study’s own"
 FROM_RATE = "from {rate}{over}"
-FROM_OVERALL = "from an overall risk of {overall}, {share} having the exposure"
+FROM_OVERALL = "from an overall risk of {overall}, {share} of people {group}"
 
 
 def own(patient: PatientFindings) -> bool:
@@ -29,8 +31,9 @@ def as_in_the_study(patient: PatientFindings) -> bool:
 
 
 def value(patient: PatientFindings) -> str:
-    """The starting risk over the study's span: the study's own with its one decimal, else as somebody would type it."""
-    return numbers.percent(patient.baseline) if own(patient) else numbers.percent_given(patient.baseline)
+    """The starting risk over the study's span: as it was typed, or with one decimal where it is worked out."""
+    typed = patient.start_from == "typed"
+    return numbers.percent_given(patient.baseline) if typed else numbers.percent(patient.baseline)
 
 
 def named(patient: PatientFindings) -> str:
@@ -50,6 +53,11 @@ def at_one_level(patient: PatientFindings, choices: Choices) -> PatientFindings:
         return patient
     bare = Figure(estimate=patient.without.estimate, interval=Gap("bare-starting-risk"), method="")
     return msgspec.structs.replace(patient, without=bare)
+
+
+def share_name(outcome: Outcome) -> str:
+    """``Share of people with night lights``: whose share goes with an overall risk."""
+    return SHARE.format(group=names.in_group(subject(outcome), "index"))
 
 
 def given(outcome: Outcome, patient: PatientFindings, choices: Choices) -> str:
@@ -72,7 +80,7 @@ def _worked_out(outcome: Outcome, patient: PatientFindings) -> str:
     if patient.start_from == "overall":
         overall = _as_risk(read_risk(typed.overall_risk_text), typed.overall_risk_text)
         share = _as_risk(read_share(typed.exposed_share_text), typed.exposed_share_text)
-        return FROM_OVERALL.format(overall=overall, share=share)
+        return FROM_OVERALL.format(overall=overall, share=share, group=names.in_group(subject(outcome), "index"))
     return ""
 
 

@@ -15,9 +15,9 @@ HAZARDS = {"adjusted_text": "HR 0.6 (0.4 to 0.9)"}
 OVERALL = {"start_kind": "overall", "overall_risk_text": "12%", "exposed_share_text": "30%"}
 OF_CARRYING = {
     "effect-kept-constant", "effect-kept-elsewhere", "difference-kept-constant", "baseline-far", "baseline-uncertain",
-    "hazard-ratio", "constant-rates", "other-span", "solved-from-overall", "from-a-rate", "crude-carried",
-    "within-pairs", "adjusted-opposite", "adjusted-turned", "carried-level", "converted-limits", "adjusted-converted",
-    "rests-on-baseline", "controls-over-time",
+    "hazard-ratio", "constant-rates", "other-span", "solved-from-overall", "from-a-rate",
+    "within-pairs", "adjusted-opposite", "adjusted-turned", "carried-level", "adjusted-converted",
+    "rests-on-baseline", "controls-over-time", "observational", "crude-beside-adjusted",
 }  # fmt: skip
 
 
@@ -120,26 +120,90 @@ def test_a_solved_starting_risk_is_no_bare_one():
     assert "baseline-uncertain" not in facts(of_total, patient=OVERALL)
 
 
-def test_a_crude_effect_outside_trials():
-    """Where the paper's adjusted effect is there it could be carried instead, and says so."""
-    alone = facts(of_total, design="cohort")["crude-carried"]
-    beside = facts(of_total, design="cohort", patient={"starting_risk_text": "12%", "effect": "odds_ratio"}, **ADJUSTED)
-    assert ("beside" in alone, beside["crude-carried"]["beside"]) == (False, "adjusted")
-    assert facts(strata)["crude-carried"]["strata"] == 2
+@pytest.mark.parametrize(
+    ("make", "crude"),
+    [
+        (lambda **fields: of_total(design="cohort", **fields), "risk_ratio"),
+        (strata, "risk_ratio"),
+        (lambda **fields: paired("matched", **fields), "odds_ratio"),
+        (lambda **fields: effect_only("odds_ratio", design="cohort", **fields), "odds_ratio"),
+    ],
+)
+def test_a_crude_effect_that_is_carried_outside_trials_is_called_crude_once(make, crude):
+    """The caution about confounding names it; at the study's own risk no effect is carried, and none is named."""
+    carried = facts(make)["observational"]
+    assert (carried["effect"], carried["baseline"], "beside" in carried) == (crude, 0.12, False)
+    assert "effect" not in facts(make, patient={})["observational"]
+
+
+def test_beside_an_adjusted_effect_the_crude_one_says_what_could_be_carried_instead():
+    """Confounding is said of both, and that the figures are crude where the adjusted one is named."""
+    odds = {"starting_risk_text": "12%", "effect": "odds_ratio"}
+    crude = facts(of_total, design="cohort", patient=odds, **ADJUSTED)
+    assert crude["observational"] == {"design": "cohort", "beside": "adjusted"}
+    assert (crude["crude-beside-adjusted"]["effect"], "carriable" in crude["crude-beside-adjusted"]) == (
+        "odds_ratio",
+        True,
+    )
+    adjusted = facts(of_total, design="cohort", **ADJUSTED)
+    assert "effect" not in adjusted["crude-beside-adjusted"]
+    rates = facts(
+        of_total, design="cohort", adjusted_text="rate difference -2 (-3 to -1)", adjusted_measure="rate_difference"
+    )
+    assert ("effect" in rates["crude-beside-adjusted"], "carriable" in rates["crude-beside-adjusted"]) == (True, False)
 
 
 @pytest.mark.parametrize(
     ("make", "fields"),
-    [(of_total, {}), (of_total, {"design": "cohort", **ADJUSTED}), (effect_only, {"design": "trial"}), (paired, {})],
+    [(of_total, {}), (effect_only, {"design": "trial"}), (paired, {})],
 )
-def test_no_crude_effect_in_trials_or_once_adjusted(make, fields):
-    """Randomisation, or the authors' model, deals with it."""
-    assert "crude-carried" not in facts(make, **fields)
+def test_no_crude_effect_in_trials(make, fields):
+    """Randomisation deals with it."""
+    assert not {"observational", "crude-beside-adjusted"} & set(facts(make, **fields))
 
 
-def test_a_crude_effect_without_a_patient_is_not_carried():
-    """At the study's own risk the figures are the study's, whose own caution speaks."""
-    assert "crude-carried" not in facts(of_total, design="cohort", patient={})
+def test_a_case_control_study_says_each_thing_once():
+    """With a starting risk: what all rests on, how controls were sampled, and confounding; no more."""
+    said = [
+        one.key
+        for one in appraise(
+            of_total(design="case-control", patient=Patient(starting_risk_text="12%")), Choices()
+        ).cautions
+    ]
+    assert said == ["baseline-uncertain", "rests-on-baseline", "controls-over-time", "observational"]
+    printed = appraise(
+        effect_only("odds_ratio", design="case-control", patient=Patient(starting_risk_text="12%")), Choices()
+    )
+    assert {"effect-kept-elsewhere", "totals-are-sampled"}.isdisjoint(one.key for one in printed.cautions)
+
+
+@pytest.mark.parametrize(
+    ("typed", "key", "risk"),
+    [
+        ({"start_kind": "rate", "rate_text": "12 per 100 person-years"}, "from-a-rate", "11.3%"),
+        (OVERALL, "solved-from-overall", "13.9%"),
+        ({"starting_risk_text": "11.31%"}, "effect-kept-constant", "11.31%"),
+    ],
+)
+def test_a_starting_risk_that_was_worked_out_has_a_computed_ones_digits(typed, key, risk):
+    """What was typed is said as typed."""
+    outcome = of_total(patient=Patient(**typed))
+    (said,) = [caution_text(one) for one in appraise(outcome, Choices()).cautions if one.key == key]
+    assert f" {risk} " in said
+
+
+def test_no_span_is_left_where_only_one_is_known():
+    """A hazard ratio at a rate over five years, the study's span unknown: nothing is carried between spans."""
+    typed = {"start_kind": "rate", "rate_text": "1% per year", "other_span_text": "5 years"}
+    found = facts(effect_only, patient=typed, span_text="")
+    assert ("other-span" in found, "from-a-rate" in found) == (False, True)
+
+
+@pytest.mark.parametrize("span", ["", "5 years"])
+def test_that_rates_stay_constant_is_said_once(span):
+    """Of a rate ratio at a rate, over one span or two."""
+    found = facts(person_time, patient={"start_kind": "rate", "rate_text": "12% per year", "other_span_text": span})
+    assert len({"other-span", "constant-rates", "from-a-rate"} & set(found)) == 1
 
 
 def test_an_adjusted_effect_on_the_other_side_is_called_out():

@@ -11,6 +11,7 @@ from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.findings import Figure, Gap, Interval, PatientFindings, Range
 from fourcount.record.outcome import Outcome, Patient
 from fourcount.record.paper import Choices
+from fourcount.stats.hazards import over_spans
 from fourcount.stats.normal import quantile
 from fourcount.stats.propagation import limits_as_typed, limits_of_counts, propagated
 
@@ -66,7 +67,7 @@ def test_other_people_with_counts_have_both_imprecisions_propagated(effect):
     assert (patient.range_from, patient.start_from, patient.baseline) == ("both", "typed", 0.12)
     for figure, limits in ((patient.with_, both.with_), (patient.difference, both.difference)):
         assert (limits.low, limits.high) == (figure.interval.low, figure.interval.high)
-    assert ends(patient.without) == (both.without.low, 0.12, both.without.high)
+    assert ends(patient.without) == (start.at(-quantile(0.95)), 0.12, start.at(quantile(0.95)))
     assert patient.start_interval == patient.without.interval
 
 
@@ -86,16 +87,16 @@ def test_every_interval_under_one_head_has_its_level(outcome, level, span):
     typed = {"starting_risk_text": "12% (99% CI 9 to 15)", "other_span_text": span}
     patient = patient_of(outcome, 0.9 if level == 0.9 else 0.95, **typed)
     start = limits_as_typed(0.12, 0.09, 0.15, 0.99)
-    both = propagated(
-        patient.effect, patient.carried.estimate, patient.carried.interval, level, start, 5 if span else 1
-    )
+    spans, carried = 5.0 if span else 1.0, patient.carried
+    both = propagated(patient.effect, carried.estimate, carried.interval, level, start, spans)
     assert (patient.level, patient.start_level) == (level, 0.99)
     assert Interval(low=0.09, high=0.15) == patient.start_interval
     for figure, limits in (
-        (patient.without, both.without), (patient.with_, both.with_),
-        (patient.difference, both.difference), (patient.risk_ratio, both.risk_ratio),
+        (patient.with_, both.with_), (patient.difference, both.difference), (patient.risk_ratio, both.risk_ratio)
     ):  # fmt: skip
         assert (figure.interval.low, figure.interval.high) == (limits.low, limits.high)
+    own = [over_spans(start.at(sign * quantile(level)), spans) for sign in (-1, 1)]
+    assert [patient.without.interval.low, patient.without.interval.high] == own
 
 
 def test_an_effect_without_limits_leaves_the_start_at_the_level_of_the_head():
@@ -122,7 +123,7 @@ def test_typed_limits_keep_their_own_level():
     assert not isinstance(both, Gap)
     assert ends(patient.difference)[::2] == (both.difference.low, both.difference.high)
     assert Interval(low=0.09, high=0.15) == patient.start_interval
-    assert ends(patient.without)[::2] == (both.without.low, both.without.high)
+    assert ends(patient.without)[::2] == (start.at(-quantile(0.95)), start.at(quantile(0.95)))
 
 
 def test_a_propagated_range_is_wider_than_that_of_a_bare_value():

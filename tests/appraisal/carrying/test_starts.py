@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import math
 
+import msgspec
 import pytest
 from hypothesis import given
 from hypothesis import strategies as st
@@ -50,7 +51,7 @@ def test_three_risks_whose_usual_one_is_the_studys():
 def test_a_risk_on_the_wrong_side_of_the_studys_is_marked():
     """A low risk above the study's 17.1% gives nothing; the other two stand."""
     findings = three(low="18%", usual="")
-    assert findings.patient.low == Gap("baseline-unreadable")
+    assert findings.patient.low == Gap("low-above-usual")
     assert isinstance(findings.patient.high, PatientFindings)
     assert ("low_risk_text", "low-above-usual") in [(mark.field, mark.key) for mark in findings.marks]
 
@@ -58,7 +59,7 @@ def test_a_risk_on_the_wrong_side_of_the_studys_is_marked():
 def test_a_low_risk_above_the_usual_one_gives_nothing():
     """30% is no low risk beside a usual one of 12%."""
     findings = three(low="30%")
-    assert findings.patient.low == Gap("baseline-unreadable")
+    assert findings.patient.low == Gap("low-above-usual")
     assert findings.patient.baseline == 0.12
     assert any(mark.field == "low_risk_text" and not mark.used for mark in findings.marks)
 
@@ -137,11 +138,36 @@ def test_an_overall_risk_of_people_without_the_exposure_is_their_own():
     assert patient.difference == alone.difference
 
 
-def test_an_overall_risk_that_no_starting_risk_gives():
-    """Of 90% overall, half exposed with four times the risk, the exposed would have over 100%."""
-    typed = {**OVERALL, "overall_risk_text": "90%", "exposed_share_text": "50%"}
-    findings = found(lambda patient: effect_only("risk_ratio", "4.0 (3.0 to 5.0)", patient=patient), **typed)
-    assert findings.patient == Gap("beyond-one")
+@pytest.mark.parametrize(
+    ("make", "overall", "key"),
+    [
+        (lambda patient: effect_only("risk_ratio", "4.0 (3.0 to 5.0)", patient=patient), "90%", "solved-beyond-one"),
+        (lambda patient: of_total((70, 409, 1, 409), patient=patient), "90%", "solved-beyond-one-odds"),
+        (
+            lambda patient: effect_only("risk_difference", "20% (10% to 30%)", patient=patient),
+            "1%",
+            "solved-beyond-zero",
+        ),
+        (
+            lambda patient: of_total(
+                (70, 409, 1, 409), patient=msgspec.structs.replace(patient, effect="risk_difference")
+            ),
+            "1%",
+            "solved-beyond-zero-odds",
+        ),
+    ],
+)
+def test_an_overall_risk_that_no_starting_risk_gives(make, overall, key):
+    """Of 90% overall, half exposed with four times the risk, the exposed would have over 100%; odds never do."""
+    typed = {**OVERALL, "overall_risk_text": overall, "exposed_share_text": "50%"}
+    assert found(make, **typed).patient == Gap(key)
+
+
+def test_low_and_high_without_a_usual_one_have_to_be_in_order():
+    """In a study without a risk of its own neither of the two can be the one that is right."""
+    findings = three(low="30%", usual="", high="20%")
+    assert findings.patient.low == Gap("low-above-high")
+    assert findings.patient.high == Gap("high-below-low")
 
 
 @pytest.mark.parametrize(

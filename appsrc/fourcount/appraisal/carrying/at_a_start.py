@@ -79,12 +79,16 @@ def _ratio_at(one: Carriable, start: float, without: float, spans: float, risk: 
         found = risk(value)
         if isinstance(found, Gap):
             return found
-        if without > 0.0:
-            return found / without
-        # The ratio has an end where the starting risk goes to 0, and a difference has none there.
-        return Gap("undetermined-at-baseline") if one.effect == "risk_difference" else value
+        return _times(one, value, found, without)
 
     return mapped(one.figure, ratio)
+
+
+def _times(one: Carriable, value: float, with_: float, without: float) -> float | Gap:
+    """One risk over the other. It has an end where the starting risk goes to 0; a difference has none there."""
+    if without > 0.0:
+        return with_ / without
+    return Gap("undetermined-at-baseline") if one.effect == "risk_difference" else value
 
 
 def _from_overall(one: Carriable, overall: float, share: float, spans: float) -> Carried:
@@ -99,7 +103,10 @@ def _from_overall(one: Carriable, overall: float, share: float, spans: float) ->
 
     def risk(value: float) -> float | Gap:
         found = start(value)
-        return found if isinstance(found, Gap) else _over_or_gap(risk_with(one.effect, value, found), spans)
+        if isinstance(found, Gap):
+            return found
+        # Where all are exposed theirs is the overall risk, to the last bit.
+        return _over_or_gap(overall if share == 1.0 else risk_with(one.effect, value, found), spans)
 
     def apart(value: float) -> float | Gap:
         return _together(risk(value), without(value), lambda with_, none: with_ - none)
@@ -107,9 +114,7 @@ def _from_overall(one: Carriable, overall: float, share: float, spans: float) ->
     def ratio(value: float) -> float | Gap:
         if spans == 1.0 and one.effect == "risk_ratio":
             return value
-        return _together(
-            risk(value), without(value), lambda with_, none: with_ / none if none else Gap("undetermined-at-baseline")
-        )
+        return _together(risk(value), without(value), lambda with_, none: _times(one, value, with_, none))
 
     estimate = one.figure.estimate
     return Carried(
@@ -162,7 +167,7 @@ def _propagated(
 
     return Carried(
         baseline=bare.baseline,
-        without=_with_interval(without, _interval(found.without.low, found.without.high, None)),
+        without=without,
         with_=limited(bare.with_, found.with_),
         difference=limited(bare.difference, found.difference),
         risk_ratio=limited(bare.risk_ratio, found.risk_ratio),

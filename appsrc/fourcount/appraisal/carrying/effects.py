@@ -5,10 +5,9 @@ from __future__ import annotations
 from collections.abc import Iterable
 from typing import cast
 
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL
 from fourcount.appraisal.extras.printed import ReadEffect, as_figure, level_of
 from fourcount.appraisal.findings import Carriable, CarriedEffect, Figure, Gap, PrintedFigure
-from fourcount.appraisal.gating import withheld_of_effects
+from fourcount.appraisal.gating import OBSERVATIONAL, withheld_of_effects
 from fourcount.appraisal.turning import oriented_effect
 from fourcount.record.outcome import Design, Effect, Outcome
 

@@ -42,11 +42,12 @@ def mark_of_span(outcome: Outcome) -> tuple[Mark, ...]:
     return (Mark(field="other_span_text", key=reading.key, facts=reading.facts),)
 
 
-def spans_of(outcome: Outcome, *, any_span: bool) -> Spans | Gap:
+def spans_of(outcome: Outcome, *, any_span: bool, any_follow_up: bool = False) -> Spans | Gap:
     """The spans in use, or why the one asked for cannot be had.
 
     ``any_span`` says that the effect holds whatever the time (a hazard or a rate ratio) and the starting risk comes
-    from a rate, so that the study's own span need not be known.
+    from a rate, so that the study's own span need not be known. ``any_follow_up`` says that neither the effect nor the
+    starting risk comes from shares of raw counts.
     """
     study, other = read_duration(outcome.span_text), read_duration(outcome.patient.other_span_text)
     own = study if isinstance(study, Duration) and study.years > 0.0 else None
@@ -56,7 +57,7 @@ def spans_of(outcome: Outcome, *, any_span: bool) -> Spans | Gap:
         return Gap("span-unreadable")
     if outcome.design == "survey":
         return Gap("other-span-survey")
-    if outcome.follow_up_varied and not isinstance(outcome.table, AT_ONE_TIME):
+    if outcome.follow_up_varied and not any_follow_up and not isinstance(outcome.table, AT_ONE_TIME):
         return Gap("other-span-varied")
     if own is None:
         return Spans(other=other) if any_span else Gap("other-span-needs-study-span")

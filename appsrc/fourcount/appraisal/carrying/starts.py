@@ -20,6 +20,8 @@ if TYPE_CHECKING:
 
 BARE = Gap("bare-starting-risk")
 UNREADABLE = Gap("baseline-unreadable")
+OUT_OF_ORDER = ("low-above-usual", "high-below-usual", "low-above-high", "high-below-low")
+"""Why one of three starting risks that can be read is not used."""
 
 
 @dataclass(frozen=True, kw_only=True, slots=True)
@@ -47,9 +49,11 @@ class Start:
         return own, None if isinstance(own, Gap) else level
 
     def own_limits(self, level: float) -> Interval | Gap:
-        """Its own limits at a level; those of another level go there along Wilson's scale."""
+        """Its own limits at a level; typed ones of another level go there along Wilson's scale."""
         if self.limits is None:
             return BARE
+        if self.typed is not None and self.typed_level == level:
+            return self.typed
         z = quantile(level)
         return Interval(low=self.limits.at(-z), high=self.limits.at(z))
 
@@ -84,12 +88,6 @@ def starts_of(
     if isinstance(usual, Start) and usual.origin == "reference":
         return _beside_the_studys(outcome, usual, low, high)
     return Starts(usual=usual, low=low, high=high)
-
-
-def typed_value(reading: StartReading) -> float | None:
-    """The typed risk of the chosen kind, whichever it is; None where none can be read."""
-    typed = reading.overall if isinstance(reading.overall, Proportion) else reading.usual
-    return typed.value if isinstance(typed, Proportion | RiskReading) else None
 
 
 def _usual(reading: RiskReading | Blank | Unreadable, own: float | Gap | None, needs: str, rank: Rank) -> Start | Gap:
@@ -130,7 +128,9 @@ def _typed(reading: RiskReading, rank: Rank) -> Start:
 def _side(reading: Proportion | Blank | Unreadable, rank: Rank) -> Start | Gap | None:
     if isinstance(reading, Blank):
         return None
-    return UNREADABLE if isinstance(reading, Unreadable) else Start(value=reading.value, origin="typed", rank=rank)
+    if isinstance(reading, Unreadable):
+        return Gap(reading.key) if reading.key in OUT_OF_ORDER else UNREADABLE
+    return Start(value=reading.value, origin="typed", rank=rank)
 
 
 def _beside_the_studys(outcome: Outcome, usual: Start, low: Start | Gap | None, high: Start | Gap | None) -> Starts:
@@ -138,10 +138,10 @@ def _beside_the_studys(outcome: Outcome, usual: Start, low: Start | Gap | None, 
     marks: list[Mark] = []
     patient = outcome.patient
     if isinstance(low, Start) and low.value > usual.value:
-        low = UNREADABLE
+        low = Gap("low-above-usual")
         marks.append(_wrong("low_risk_text", "low-above-usual", patient.low_risk_text))
     if isinstance(high, Start) and high.value < usual.value:
-        high = UNREADABLE
+        high = Gap("high-below-usual")
         marks.append(_wrong("high_risk_text", "high-below-usual", patient.high_risk_text))
     return Starts(usual=usual, low=low, high=high, marks=tuple(marks))
 

@@ -3,11 +3,7 @@
 from __future__ import annotations
 
 from fourcount.appraisal.findings import EValues, Figure, Gap, Interval
-from fourcount.record.outcome import Design
 from fourcount.stats.e_value import e_value, e_value_of_limit, ratio_of_common_hazards, ratio_of_common_odds
-
-OBSERVATIONAL: tuple[Design, ...] = ("cohort", "survey", "case-control", "matched")
-"""The designs whose groups are compared as they are found."""
 
 COMMON = 0.15
 """An outcome that more people than this have is common here (VanderWeele and Ding 2017, Ann Intern Med 167:268)."""

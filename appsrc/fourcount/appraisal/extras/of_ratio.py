@@ -2,11 +2,12 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.carrying.starts import typed_value
 from fourcount.appraisal.extras.attributable import of_exposed, prevented
-from fourcount.appraisal.extras.e_values import COMMON, OBSERVATIONAL, e_values
+from fourcount.appraisal.extras.e_values import COMMON, e_values
 from fourcount.appraisal.extras.printed import RATIOS, ReadEffect, as_figure
 from fourcount.appraisal.findings import Clusters, Counts, EValues, Extras, Figure, Gap
+from fourcount.appraisal.gating import OBSERVATIONAL
+from fourcount.record.entry.readings import Proportion, RiskReading
 from fourcount.record.entry.starts import read_start
 from fourcount.record.outcome import Outcome
 
@@ -47,8 +48,12 @@ def e_value_of(
 
 
 def outcome_is_common(outcome: Outcome, counts: Counts | None) -> bool:
-    """Whether over 15% have the event: of the table's people; of a case-control study's by a typed starting risk."""
+    """Whether over 15% have the event: of the table's people; of a case-control study's by the risk that is typed.
+
+    That is a starting risk, or the overall risk of all people where the starting risk is solved from it.
+    """
     if outcome.design in ("case-control", "matched") or counts is None:
-        typed = typed_value(read_start(outcome.patient))
-        return typed is not None and typed > COMMON
+        typed = read_start(outcome.patient)
+        risk = typed.overall if isinstance(typed.overall, Proportion) else typed.usual
+        return isinstance(risk, Proportion | RiskReading) and risk.value > COMMON
     return counts.total > 0 and counts.events / counts.total > COMMON

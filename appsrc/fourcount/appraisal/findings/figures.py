@@ -20,10 +20,10 @@ class Range(msgspec.Struct, frozen=True, kw_only=True):
 
 
 class NumberNeededRange(msgspec.Struct, frozen=True, kw_only=True):
-    """A number needed of which exactly one limit cannot be given, since the difference has none there.
+    """A number needed of which a limit cannot be given, since the difference has none there, or neither of them.
 
     All else is as in ``NumberNeeded``: a withheld limit of the difference lies beyond 0 on its own side, so that it
-    decides about infinity as a limit in its place would.
+    decides about infinity as a limit in its place would, unless what is carried tells that it stays on the other one's.
     """
 
     estimate: float

@@ -91,6 +91,14 @@ GAP_KEYS = (
     "other-span-varied",  # people were followed for different times, so their risks belong to none
     "other-span-pairs",  # of the same people, no interval follows from those of two risks
     "baseline-unreadable",  # the typed starting risk gives no risk
+    "low-above-usual",  # of three starting risks the low one lies above the usual one
+    "high-below-usual",  # or the high one below it
+    "low-above-high",  # or, without a usual one, the low one above the high one
+    "high-below-low",  # which is the same of the high one
+    "solved-beyond-one",  # no starting risk up to 100% gives the overall risk under this effect
+    "solved-beyond-one-odds",  # the same where an odds ratio could be carried, which never does so
+    "solved-beyond-zero",  # no starting risk from 0% gives it
+    "solved-beyond-zero-odds",  # the same where an odds ratio could be carried
     "carried-gap",  # the effect to carry has no value
     "other-level",  # the study's own starting risk has an interval of another level than the effect carried to it
     "bare-starting-risk",  # the starting risk is a bare value without an interval of its own

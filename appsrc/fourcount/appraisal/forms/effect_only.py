@@ -2,11 +2,11 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
+from fourcount.appraisal.carrying.carry import marks_of
 from fourcount.appraisal.carrying.effects import of_print
 from fourcount.appraisal.carrying.study import Study
 from fourcount.appraisal.case import Case
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL, e_values
+from fourcount.appraisal.extras.e_values import e_values
 from fourcount.appraisal.extras.of_ratio import outcome_is_common
 from fourcount.appraisal.extras.printed import (
     DIFFERENCES,
@@ -29,8 +29,8 @@ from fourcount.appraisal.findings import (
     Recovered,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import line_of, whole
-from fourcount.appraisal.gating import SUPPORT, withheld_of_effects
+from fourcount.appraisal.forms.whole import for_the_reader, line_of, whole
+from fourcount.appraisal.gating import OBSERVATIONAL, SUPPORT, withheld_of_effects
 from fourcount.appraisal.postponing import Pace
 from fourcount.appraisal.turning import oriented_effect
 from fourcount.record.entry.starts import read_start
@@ -55,13 +55,15 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     if isinstance(printed, Gap):
         return nothing_yet(printed, form="effect-only", measures=(outcome.paper_measure,), marks=marks)
     if isinstance(figure, Gap):
-        return nothing_yet(figure, form="effect-only", measures=(printed.measure,), marks=marks, given=printed)
+        line, line_marks = line_of(outcome, {printed.measure: figure}, None, level_of(printed))
+        marks += line_marks
+        return nothing_yet(
+            figure, form="effect-only", measures=(printed.measure,), marks=marks, given=printed, line=line
+        )
     figure, recovered = _with_interval(figure, printed)
     study = _study(printed, figure, outcome)
-    carried = for_a_patient(study, typed)
     p = recovered if isinstance(recovered, Gap) else recovered.p
     figures: dict[str, Figure] = {printed.measure: figure}
-    line, line_marks = line_of(outcome, figures, None, level_of(printed))
     case = Case(
         outcome=outcome,
         form="effect-only",
@@ -69,12 +71,9 @@ def appraise_effect(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         choices=choices,
         figures=figures,
         test=Probability(p=p, method=RECOVERED),
-        conversion=carried.conversion,
-        patient=carried.patient,
-        marks=marks + carried.marks + line_marks,
+        reader=for_the_reader(study, typed, figures, level_of(printed)),
+        marks=marks,
         extras=Extras(e_value=_e_value(printed, figure, outcome), recovered=recovered),
-        carriable=study.carriable,
-        line=line,
     )
     return whole(case, figures)
 

@@ -2,8 +2,8 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
-from fourcount.appraisal.carrying.of_table import study_of_counts
+from fourcount.appraisal.carrying.carry import marks_of
+from fourcount.appraisal.carrying.studies import study_of_counts
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.extras.of_counts import extras_of_counts
@@ -14,7 +14,7 @@ from fourcount.appraisal.findings import (
     OutcomeFindings,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import line_of, whole
+from fourcount.appraisal.forms.whole import for_the_reader, whole
 from fourcount.appraisal.gating import support_of
 from fourcount.appraisal.losses import losses_of
 from fourcount.appraisal.measures import Table, all_figures, measures, own_test
@@ -40,10 +40,7 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     table = Table(counts=counts, choices=choices, postponed=later, behind=clusters.behind(counts))
     figures = all_figures(table, support)
     study = study_of_counts(outcome, figures, support, adjusted, choices.level)
-    carried = for_a_patient(study, typed)
     shown = measures(figures, support, welcome=outcome.welcome)
-    effective = table.effective
-    line, line_marks = line_of(outcome, shown, None if isinstance(effective, Gap) else effective, choices.level)
     case = Case(
         outcome=outcome,
         form=form,
@@ -51,13 +48,10 @@ def appraise_counts(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         choices=choices,
         figures=figures,
         test=Gap(support.refused) if support.refused else own_test(table),
-        conversion=carried.conversion,
-        patient=carried.patient,
-        marks=marks + carried.marks + line_marks,
+        reader=for_the_reader(study, typed, shown, choices.level, table.effective),
+        marks=marks,
         extras=extras_of_counts(outcome, counts, table, figures, clusters, losses, adjusted, pace),
         randomised=losses.randomised,
-        carriable=study.carriable,
-        line=line,
     )
     return whole(case, shown, reading.totals)
 

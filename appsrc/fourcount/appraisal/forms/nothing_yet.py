@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Iterable
 
-from fourcount.appraisal.findings import Gap, Mark, OutcomeFindings, PrintedFigure, Totals
+from fourcount.appraisal.findings import Gap, Mark, OutcomeFindings, OwnLine, PrintedFigure, Totals
 from fourcount.record.outcome import Form
 
 
@@ -16,8 +16,12 @@ def nothing_yet(
     totals: Totals | None = None,
     marks: tuple[Mark, ...] = (),
     given: PrintedFigure | None = None,
+    line: OwnLine | Gap | None = None,
 ) -> OutcomeFindings:
-    """Every figure is withheld for one and the same reason; an effect that was read stays told all the same."""
+    """Every figure is withheld for one and the same reason; an effect that was read stays told all the same.
+
+    ``line`` is why the reader's own one cannot be drawn on such an effect, where one is typed.
+    """
     return OutcomeFindings(
         form=form,
         counts=gap if given is None else Gap("not-counts"),
@@ -29,5 +33,6 @@ def nothing_yet(
         conversion=gap,
         patient=gap,
         cautions=(),
+        line=line,
         strata=gap if form == "strata" else None,
     )

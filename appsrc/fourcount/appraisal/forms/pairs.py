@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from collections.abc import Callable
 
-from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
-from fourcount.appraisal.carrying.of_table import study_of_pairs
+from fourcount.appraisal.carrying.carry import marks_of
+from fourcount.appraisal.carrying.studies import study_of_pairs
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
@@ -20,7 +20,7 @@ from fourcount.appraisal.findings import (
 )
 from fourcount.appraisal.forms.by_method import ByMethod
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import Measure, given_or_why, line_of, whole
+from fourcount.appraisal.forms.whole import Measure, for_the_reader, given_or_why, whole
 from fourcount.appraisal.gating import Withheld, withheld_of_pairs
 from fourcount.appraisal.measures import number_needed_from
 from fourcount.appraisal.postponing import NOTHING, PAIRS_NEED_NUMPY, Pace
@@ -58,8 +58,6 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     refused = withheld.get("pair_odds_ratio")
     measures = {key: _measure(key, figures, withheld, welcome=outcome.welcome) for key in PAIR_MEASURES}
     study = study_of_pairs(outcome, figures, withheld, adjusted, choices.level)
-    carried = for_a_patient(study, typed)
-    line, line_marks = line_of(outcome, measures, None, choices.level)
     case = Case(
         outcome=outcome,
         form="pairs",
@@ -67,14 +65,11 @@ def appraise_pairs(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         choices=choices,
         figures=figures,
         test=Gap(refused) if refused else by.probability(family.test, pairs),
-        conversion=carried.conversion,
-        patient=carried.patient,
-        marks=marks + carried.marks + line_marks,
+        reader=for_the_reader(study, typed, measures, choices.level),
+        marks=marks,
         extras=extras_of_ratio(
             outcome, figures.get("pair_odds_ratio"), "odds_ratio", adjusted, clusters=clusters.clusters
         ),
-        carriable=study.carriable,
-        line=line,
     )
     return whole(case, measures, totals)
 

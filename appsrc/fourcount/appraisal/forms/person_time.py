@@ -2,9 +2,8 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
-from fourcount.appraisal.carrying.of_table import study_of_rates
-from fourcount.appraisal.carrying.study import Study
+from fourcount.appraisal.carrying.carry import marks_of
+from fourcount.appraisal.carrying.studies import study_of_rates
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import clusters_of
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
@@ -19,7 +18,7 @@ from fourcount.appraisal.findings import (
 )
 from fourcount.appraisal.forms.by_method import ByMethod
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import Measure, given_or_why, line_of, whole
+from fourcount.appraisal.forms.whole import Measure, for_the_reader, given_or_why, whole
 from fourcount.appraisal.gating import withheld_of_rates
 from fourcount.appraisal.postponing import NOTHING, RATES_NEED_NUMPY, Pace
 from fourcount.record.entry.person_time import read_person_time
@@ -47,16 +46,10 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     by = ByMethod(level=choices.level, without=clusters.elsewhere, waiting=waiting)
     figures = {} if withheld else _figures(rates, family, by)
     refused = Gap(withheld["rate_ratio"]) if withheld else None
-    study = (
-        study_of_rates(outcome, figures, adjusted, choices.level)
-        if refused is None
-        else Study(outcome=outcome, carriable=(), refused=refused)
-    )
-    carried = for_a_patient(study, typed)
+    study = study_of_rates(outcome, figures, withheld, adjusted, choices.level)
     measures: dict[str, Measure] = {
         key: Gap(withheld[key]) if key in withheld else given_or_why(figures[key]) for key in RATE_MEASURES
     }
-    line, line_marks = line_of(outcome, measures, None, choices.level)
     case = Case(
         outcome=outcome,
         form="person-time",
@@ -64,12 +57,9 @@ def appraise_rates(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         choices=choices,
         figures=figures,
         test=by.probability(family.test, rates) if refused is None else refused,
-        conversion=carried.conversion,
-        patient=carried.patient,
-        marks=marks + carried.marks + line_marks,
+        reader=for_the_reader(study, typed, measures, choices.level),
+        marks=marks,
         extras=extras_of_ratio(outcome, figures.get("rate_ratio"), "rate_ratio", adjusted, clusters=clusters.clusters),
-        carriable=study.carriable,
-        line=line,
     )
     return whole(case, measures, totals)
 

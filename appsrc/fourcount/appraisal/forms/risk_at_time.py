@@ -2,9 +2,8 @@
 
 from __future__ import annotations
 
-from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
-from fourcount.appraisal.carrying.of_table import study_of_risks
-from fourcount.appraisal.carrying.study import Study
+from fourcount.appraisal.carrying.carry import marks_of
+from fourcount.appraisal.carrying.studies import study_of_risks
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
 from fourcount.appraisal.extras.printed import PRINTED, adjusted_of
@@ -17,8 +16,8 @@ from fourcount.appraisal.findings import (
     TimedRisks,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import Measure, given_or_why, line_of, whole
-from fourcount.appraisal.gating import SUPPORT, withheld_of_timed
+from fourcount.appraisal.forms.whole import Measure, for_the_reader, given_or_why, whole
+from fourcount.appraisal.gating import withheld_of_timed
 from fourcount.appraisal.measures import number_needed_from
 from fourcount.appraisal.postponing import Pace
 from fourcount.record.entry.readings import PrintedRisk, RiskAtTimeReading
@@ -47,16 +46,10 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
     timed = _timed(index, reference, reading.level)
     figures = {key: figure for key, figure in _figures(index, reference, timed).items() if key not in withheld}
     nothing = Gap(withheld.get("risk_ratio", "not-counts"))
-    study = (
-        study_of_risks(outcome, figures, SUPPORT[outcome.design], adjusted, reading.level)
-        if "risk_ratio" in figures
-        else Study(outcome=outcome, carriable=(), refused=nothing)
-    )
-    carried = for_a_patient(study, typed)
+    study = study_of_risks(outcome, figures, withheld, adjusted, reading.level)
     measures: dict[str, Measure] = {}
     for key in TIMED_MEASURES:
         measures[key] = Gap(withheld[key]) if key in withheld else _measure(key, figures, welcome=outcome.welcome)
-    line, line_marks = line_of(outcome, measures, None, reading.level)
     case = Case(
         outcome=outcome,
         form="risk-at-time",
@@ -64,12 +57,9 @@ def appraise_timed(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFin
         choices=choices,
         figures=figures,
         test=nothing,
-        conversion=carried.conversion,
-        patient=carried.patient,
-        marks=marks + carried.marks + line_marks,
+        reader=for_the_reader(study, typed, measures, reading.level),
+        marks=marks,
         extras=extras_of_ratio(outcome, figures.get("risk_ratio"), "risk_ratio", adjusted),
-        carriable=study.carriable,
-        line=line,
     )
     return whole(case, measures)
 

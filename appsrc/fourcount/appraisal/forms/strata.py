@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from dataclasses import replace
 
-from fourcount.appraisal.carrying.carry import for_a_patient, marks_of
-from fourcount.appraisal.carrying.of_table import study_of_strata
+from fourcount.appraisal.carrying.carry import marks_of
+from fourcount.appraisal.carrying.studies import study_of_strata
 from fourcount.appraisal.case import Case
 from fourcount.appraisal.clusters import ReadClusters, clusters_of
 from fourcount.appraisal.extras.of_ratio import extras_of_ratio
@@ -21,7 +21,7 @@ from fourcount.appraisal.findings import (
     StratumFindings,
 )
 from fourcount.appraisal.forms.nothing_yet import nothing_yet
-from fourcount.appraisal.forms.whole import Measure, given_or_why, line_of, whole
+from fourcount.appraisal.forms.whole import Measure, for_the_reader, given_or_why, whole
 from fourcount.appraisal.gating import Support, support_of
 from fourcount.appraisal.measures import Table, all_figures, measures, number_needed_from, own_test
 from fourcount.appraisal.pooling import cmh, homogeneity, interactions, parting, pooled_figures
@@ -60,9 +60,7 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
     parts = _strata(strata, labels, table, crude, support, clusters.elsewhere)
     pooled = {} if isinstance(parts, Gap) else _given(parts)
     study = study_of_strata(outcome, pooled, support, adjusted, choices.level)
-    carried = for_a_patient(study, typed)
     shown = _measures(crude, parts, support, outcome)
-    line, line_marks = line_of(outcome, {**shown, **pooled}, None, choices.level)
     case = Case(
         outcome=outcome,
         form="strata",
@@ -70,13 +68,10 @@ def appraise_strata(outcome: Outcome, choices: Choices, pace: Pace) -> OutcomeFi
         choices=choices,
         figures={**crude, **pooled},
         test=Gap(support.refused) if support.refused else own_test(table),
-        conversion=carried.conversion,
-        patient=carried.patient,
-        marks=marks + carried.marks + line_marks,
+        reader=for_the_reader(study, typed, {**shown, **pooled}, choices.level),
+        marks=marks,
         extras=_extras(pooled, outcome, counts, adjusted, clusters),
         strata=parts,
-        carriable=study.carriable,
-        line=line,
     )
     return whole(case, shown, totals)
 

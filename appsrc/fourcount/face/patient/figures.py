@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from PySide6.QtCore import QPoint, Signal
+from PySide6.QtCore import QPoint, Qt, Signal
 from PySide6.QtGui import QAction
 from PySide6.QtWidgets import QMenu, QVBoxLayout, QWidget
 
@@ -14,6 +14,7 @@ from fourcount.face.links import Link
 from fourcount.face.look import Look
 from fourcount.face.patient.table import PatientTable
 from fourcount.face.picture_view import PictureView
+from fourcount.face.reading import parts
 from fourcount.face.text import Words
 from fourcount.wording.patient_labels import (
     BUTTONS,
@@ -33,9 +34,11 @@ class Figures(QWidget):
 
     **Signals**
         odds_wanted: the odds ratio is to be carried, since the effect in use would pass 100%.
+        moved: the table stands elsewhere, and with it the order of Tab.
     """
 
     odds_wanted = Signal()
+    moved = Signal()
 
     def __init__(self, look: Look, actions: dict[str, QAction], menu: QMenu) -> None:
         super().__init__()
@@ -64,19 +67,18 @@ class Figures(QWidget):
     @property
     def stops(self) -> tuple[QWidget, ...]:
         """What Tab stops at, in order."""
-        links = (self.draw, self.copy, self.curve)
-        return (self.summary, self.detail, self.odds, self.show_patient, self.handout, *links)
+        return tuple(part for part in parts(self._column) if part.focusPolicy() & Qt.FocusPolicy.TabFocus)
 
     def show_view(self, view: PatientView) -> None:
         """Show the picture and all that goes with it."""
         there = view.picture is not None
         self.drawn = view.picture
-        self.picture.show_picture(view.picture, view.sentence)
+        self.picture.show_picture(view.picture, view.sentence, view.summary)
         relative = view.relative.words.sentence if view.relative else ""
         self.relative.show_picture(view.relative, relative)
         self.summary.show_words(view.summary)
         self.detail.show_words(view.detail)
-        self.table.show_rows(view.rows, view.rows_corner, view.rows_sentence)
+        self.table.show_rows(view.rows, view.rows_head, view.rows_corner, view.rows_sentence)
         for link in (self.draw, self.copy, self.show_patient, self.handout):
             link.setVisible(there)
         self.curve.setVisible(view.to_curve)
@@ -104,6 +106,7 @@ class Figures(QWidget):
             self._several = several
             self._column.removeWidget(self.table)
             self._column.insertWidget(self._column.indexOf(self.detail) + 1 if several else -1, self.table)
+            self.moved.emit()
 
     def _on_odds(self) -> None:
         self.odds_wanted.emit()

@@ -8,7 +8,8 @@ from typing import NamedTuple
 from PySide6.QtCore import Qt, Signal
 from PySide6.QtWidgets import QGridLayout, QVBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.look import Look
 from fourcount.face.printed.quiet_link import QuietLink
@@ -77,6 +78,8 @@ class QuietRow(FieldsView):
             self.choice.chosen.connect(self._on_chosen)
         self.fields = tuple(TextField(look, text, QUIET_FIELDS[text], QUIET_HINTS.get(text, "")) for text in kind.texts)
         self._name = Words(look, "body", "muted", QUIET_NAMES[key], wraps=False)
+        if self.choice:
+            self._name.name_of(self.choice)
         self.close_link = QuietLink(look, key, "×", CLOSE_FIELDS.format(name=QUIET[key]))
         self.close_link.opened.connect(self.closed)
         policy = self.close_link.sizePolicy()

@@ -7,10 +7,11 @@ from collections.abc import Mapping
 from PySide6.QtCore import Qt, Signal
 from PySide6.QtWidgets import QGridLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.look import Look
 from fourcount.face.text import Words
-from fourcount.record.outcome import Patient, StartKind
+from fourcount.record.outcome import Outcome, StartKind
 from fourcount.wording.patient_labels import (
     START_FIELDS,
     START_HEADS,
@@ -68,14 +69,18 @@ class StartFields(FieldsView):
         """The fields of the way chosen, in reading order."""
         return tuple(self._fields[name] for name in FIELDS_OF[self._shown or "one"])
 
-    def show_state(self, patient: Patient) -> None:
-        """Show the fields of the way chosen, and what stands in them."""
-        kind = patient.start_kind
+    def show_state(self, outcome: Outcome) -> None:
+        """Show the fields of the way chosen, and what stands in them; the share is heard with whose it is."""
+        patient, kind = outcome.patient, outcome.patient.start_kind
         if self._shown != kind:
             self._arrange(kind)
         self.kind.show_choice(kind)
         for field in self.shown:
             field.show_text(getattr(patient, field.field))
+        if kind == "overall":
+            from fourcount.wording.starts import share_name
+
+            self._fields["exposed_share_text"].setAccessibleName(share_name(outcome))
 
     def show_marks(self, reasons: Mapping[str, str]) -> None:
         """Mark each field that has a reason."""

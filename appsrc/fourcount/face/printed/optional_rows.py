@@ -7,7 +7,8 @@ from typing import NamedTuple
 from PySide6.QtCore import Qt, Signal
 from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QWidget
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.look import Look
 from fourcount.face.printed.quiet_link import QuietLink
 from fourcount.face.text import Words
@@ -146,6 +147,7 @@ class OptionalRow(FieldsView):
         line = QHBoxLayout()
         line.setSpacing(12)
         if self.choice:
+            name.name_of(self.choice)
             line.addWidget(self.choice)
         fields = list(self.fields)
         last = fields.pop() if len(fields) > 1 else None
@@ -161,7 +163,9 @@ class OptionalRow(FieldsView):
     def _add_named(self, line: QHBoxLayout, field: TextField) -> None:
         """A field with the word that says what it is."""
         if field.field in NAMED:
-            line.addWidget(Words(self._look, "small", "muted", OPTIONAL_FIELDS[f"{field.field}_short"], wraps=False))
+            words = Words(self._look, "small", "muted", OPTIONAL_FIELDS[f"{field.field}_short"], wraps=False)
+            words.name_of(field)
+            line.addWidget(words)
         line.addWidget(field, 1)
 
     def _build_losses(self, name: Words) -> None:
@@ -196,6 +200,10 @@ class OptionalRow(FieldsView):
                 what = text.removeprefix(f"{group}_")
                 return TextField(self._look, text, f"{name}, {OPTIONAL_FIELDS[what]}", OPTIONAL_HINTS[what])
         return TextField(self._look, text, OPTIONAL_FIELDS[text], OPTIONAL_HINTS[text])
+
+    def read_in_order(self, parts: list[QWidget]) -> list[QWidget]:
+        """The way to close it comes last, wherever it stands."""
+        return [*(part for part in parts if part is not self.close_link), self.close_link]
 
     def align(self, width: int) -> None:
         """Give the name the width that names have in the rows above."""

@@ -6,7 +6,8 @@ from PySide6.QtCore import Signal
 from PySide6.QtGui import QResizeEvent
 from PySide6.QtWidgets import QGridLayout, QHBoxLayout
 
-from fourcount.face.fields import ChoiceField, FieldsView, TextField
+from fourcount.face.choice_field import ChoiceField
+from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.look import Look
 from fourcount.face.text import Words
 from fourcount.ink.typeset import bounded
@@ -53,6 +54,8 @@ class PaperSays(FieldsView):
         self._line.addWidget(self.measure)
         self._line.addWidget(self.text, 1)
         self._line.addStretch(0)  # holds the measure at the left where the text stands on its own line
+        self.name.name_of(self.measure)
+        self.adjusted_name.name_of(self.adjusted)
         self._rows.addWidget(self.name, 0, 0)
         self._rows.addLayout(self._line, 0, 1)
         self._rows.addWidget(self.adjusted_name, 2, 0)

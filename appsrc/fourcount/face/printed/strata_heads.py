@@ -96,6 +96,8 @@ class StrataHeads:
         ):
             widget.setVisible(shown)
         self._of_total = of_total
+        for word in (*self._roles.values(), *self._again.values()):
+            word.setVisible(bool(word.text()))
 
     def name(self, cell: str) -> str:
         """What a cell is called, without its row."""

@@ -14,6 +14,7 @@ from fourcount.face.printed.strata_heads import StrataHeads
 from fourcount.record.outcome import CELLS, Outcome, Strata, Stratum
 from fourcount.wording import labels
 from fourcount.wording.printed_labels import STRATUM_CELL
+from fourcount.wording.spoken import TOGETHER, named_sum
 
 if TYPE_CHECKING:
     from fourcount.appraisal.findings import OutcomeFindings
@@ -163,9 +164,14 @@ class StrataRows(FieldsView):
             if of_total
             else ("first_left", "first_right", "second_left", "second_right")
         )
-        for foot, key in zip(self._feet, keys, strict=True):
+        for foot, key, cell in zip(self._feet, keys, CELLS, strict=True):
             value = getattr(findings.totals, key) if findings else None
-            foot.setText("" if value is None else whole(value))
+            words = "" if value is None else whole(value)
+            foot.setText(words)
+            foot.setVisible(bool(words))
+            name = named_sum(TOGETHER, self.heads.name(cell), words)
+            if name != foot.accessibleName():
+                foot.setAccessibleName(name)
 
     def _on_moved(self, field: str, key: Qt.Key) -> None:
         """Arrows go to the neighbour; Enter goes on in reading order, and past the end asks for a row."""

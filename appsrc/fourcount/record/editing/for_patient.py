@@ -33,8 +33,15 @@ def with_start_kind(outcome: Outcome, kind: StartKind) -> Outcome:
 
 
 def with_line_kind(outcome: Outcome, kind: LineKind) -> Outcome:
-    """Say whether the reader's own line is a margin or the smallest difference that would matter; "none" hides it."""
-    return replace(outcome, line_kind=one_of(kind, LINE_KINDS))
+    """Say whether the reader's own line is a margin or the smallest difference that would matter; "none" hides it.
+
+    While nothing is typed the line goes to the side where such a line mostly lies: a margin to the worse one, what
+    would matter to the better one.
+    """
+    outcome = replace(outcome, line_kind=one_of(kind, LINE_KINDS))
+    if kind == "none" or outcome.line_text.strip():
+        return outcome
+    return replace(outcome, line_side="more" if outcome.welcome == (kind == "matters") else "fewer")
 
 
 def with_line_scale(outcome: Outcome, scale: LineScale) -> Outcome:

@@ -7,13 +7,16 @@ from fractions import Fraction
 
 from fourcount.record.entry.digits import LONGEST, decimal_number, plain, specimen, whole_number
 from fourcount.record.entry.number_words import spelled_number
-from fourcount.record.entry.readings import Blank, Duration, TimeUnit, Unreadable
+from fourcount.record.entry.readings import Blank, Duration, Mark, TimeUnit, Unreadable
 
 LONGEST_SPAN = 100.0
 """Years. No span of a patient's life is longer."""
 
 SHORTEST = Fraction(1, 10**6)
 """Less of any unit than this is no time."""
+
+NO_TIME = ("duration-not-above-zero", "duration-too-long")
+"""Why a span that is plainly said is none in anybody's life."""
 
 UNIT = r"(?:d(?:ays?)?|w(?:ks?|eeks?)?|mo(?:s|nths?)?|mths?|y(?:rs?|ears?)?)"
 """Units of time as they are written (common practice); a lone m may be minutes as well as months, and is none."""
@@ -52,6 +55,17 @@ def read_duration(text: str) -> Duration | Blank | Unreadable:
     except OverflowError:
         return _unreadable("duration-too-long", text)
     return span if span.years <= LONGEST_SPAN else _unreadable("duration-too-long", text)
+
+
+def marks_of_study_span(text: str) -> tuple[Mark, ...]:
+    """The mark of a study's own span that is no time; it is left out of every sentence.
+
+    Words are no mistake there ("median 2 years", "inpatient stay"): they are said as typed.
+    """
+    reading = read_duration(text)
+    if not isinstance(reading, Unreadable) or reading.key not in NO_TIME:
+        return ()
+    return (Mark(field="span_text", key=reading.key, facts=reading.facts),)
 
 
 def unit_named(text: str) -> TimeUnit:

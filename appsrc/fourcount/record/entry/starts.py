@@ -21,7 +21,7 @@ class StartReading(msgspec.Struct, frozen=True, kw_only=True):
 
     ``usual`` is the one risk, or the usual one of three. A low risk above the usual one, or a high one below it, is
     unreadable; without a usual one both are, where the low one is above the high one. ``marks`` are those of all
-    fields read, and those of a risk of 0 or 1, which is used.
+    fields read, and those of a risk or a share of 0 or 1, which is used.
     """
 
     usual: RiskReading | Blank | Unreadable = Blank()
@@ -73,13 +73,14 @@ def _in_order(
 
 
 def _marks(patient: Patient, read: Mapping[str, Reading]) -> tuple[Mark, ...]:
-    """A mark for what cannot be used, and for a risk that no ratio moves."""
+    """A mark for what cannot be used, for a risk that no ratio moves, and for a share of nobody or of everybody."""
     found = []
     for field, reading in read.items():
         if isinstance(reading, Unreadable):
             found.append(Mark(field=field, key=reading.key, facts=reading.facts))
-        elif field != "exposed_share_text" and isinstance(reading, RiskReading | Proportion):
-            key = {0.0: "risk-of-nobody", 1.0: "risk-of-everybody"}.get(reading.value)
+        elif isinstance(reading, RiskReading | Proportion):
+            what = "share" if field == "exposed_share_text" else "risk"
+            key = {0.0: f"{what}-of-nobody", 1.0: f"{what}-of-everybody"}.get(reading.value)
             facts: dict[str, str | int | float] = {"text": specimen(getattr(patient, field))}
             found += [Mark(field=field, key=key, facts=facts, used=True)] if key else []
     return tuple(found)

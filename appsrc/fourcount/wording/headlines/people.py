@@ -27,7 +27,7 @@ def people_headline(outcome: Outcome, figures: tuple[Figure, Figure, Figure], ch
 
 def counts_headline(outcome: Outcome, counts: Counts) -> str:
     """The counts alone, where people were followed for different times and the shares are no risks."""
-    event, span = names.event_words(outcome), names.over(names.bare(outcome.span_text))
+    event, span = names.event_words(outcome), names.over(names.span(outcome))
     reference = f"{numbers.whole(counts.reference_events)} of {numbers.whole(counts.reference_total)} people"
     index = f"{numbers.whole(counts.index_events)} of {numbers.whole(counts.index_total)}"
     groups = names.in_group(outcome, "reference"), names.in_group(outcome, "index")

@@ -64,7 +64,7 @@ ENTERING = (
         (
             "A risk, such as 12% or 12 in 100; with its limits, 12% (9 to 15); or counts, 24 of 200. A rate is typed "
             "as 12 per 1,000 person-years or 1.2% per year, and becomes a risk over the time span. An overall risk "
-            "goes with the share of people who have the exposure."
+            "goes with the share of people who have the treatment, or the exposure, of the index group."
         ),
     ),
     (

@@ -53,8 +53,8 @@ TERMS = (
         "odds ratio, and as a risk ratio at 12%",
         (
             "Odds are people with the event for each person without it; the odds ratio compares the odds of two "
-            "groups. It always lies farther from 1 than the risk ratio, the farther the more common the event. “As a "
-            "risk ratio at 12%” says what it comes to where 12 in 100 have the event without the index treatment or "
+            "groups. Of counts it lies farther from 1 than the risk ratio, the farther the more common the event. “As "
+            "a risk ratio at 12%” says what it comes to where 12 in 100 have the event without the index treatment or "
             "exposure."
         ),
     ),
@@ -115,8 +115,8 @@ TERMS = (
     (
         "an overall risk, the share exposed",
         (
-            "A register often tells the risk of everybody, exposed or not. The risk of those who are not exposed is "
-            "worked out from it, from the share who are exposed, and from the effect."
+            "A register often tells the risk of everybody, with and without what the index group has. The risk without "
+            "it is worked out from that, from the share of people who have it, and from the effect."
         ),
     ),
     (
@@ -129,9 +129,10 @@ TERMS = (
     (
         "what the interval holds",
         (
-            "At the study’s own starting risk it is the study’s own interval. At a starting risk typed with limits or "
-            "counts it holds the imprecision of both the starting risk and the effect. At a bare starting risk it "
-            "holds that of the effect only."
+            "At the study’s own starting risk it is the study’s own interval, unless another effect than that of its "
+            "counts is carried, such as an adjusted one. At a starting risk typed with limits or counts it holds the "
+            "imprecision of both the starting risk and the effect. At a bare starting risk it holds that of the effect "
+            "only."
         ),
     ),
     (

@@ -37,7 +37,7 @@ def effect_lines(outcome: Outcome, findings: OutcomeFindings, choices: Choices) 
     detail = f"{unit}{method_word(measure.method, choices)}{adjusted_words(outcome, printed)}"
     notes = [FROM_P if rebuilt else "", relative_note(measure) if key in ("risk_ratio", "rate_ratio") else ""]
     if key == "odds_ratio":
-        notes.append(conversion_text(findings.conversion, names.risk_name(outcome)))
+        notes.append(conversion_text(findings.conversion, outcome))
     line = figure_line(key, name, measure, detail=detail, notes=tuple(notes), per=per)
     estimate, interval = effect_texts(key, outcome, measure, findings)
     return (replace(line, estimate=estimate, interval=interval),)

@@ -81,7 +81,7 @@ def _line(key: str, outcome: Outcome, findings: OutcomeFindings, choices: Choice
     unit = "per 100, " if key == "pooled_risk_difference" else ""
     relative = relative_note(measure) if key == "pooled_risk_ratio" else ""
     if key == "pooled_odds_ratio":
-        relative = conversion_text(findings.conversion, names.risk_name(outcome))
+        relative = conversion_text(findings.conversion, outcome)
     detail = f"{unit}{method_word(measure.method, choices)}"
     return figure_line(key, name, measure, detail=detail, notes=(relative, parting_note(key, findings)))
 

@@ -2,8 +2,6 @@
 
 from __future__ import annotations
 
-from typing import Literal
-
 from fourcount.appraisal.findings import AnyNumberNeeded, Conversion, Counts, Figure, Gap, OutcomeFindings
 from fourcount.record.outcome import Outcome
 from fourcount.record.paper import Choices
@@ -115,7 +113,7 @@ def _notes(key: str, figure: Figure, outcome: Outcome, findings: OutcomeFindings
     if key == "risk_ratio":
         fragments += [relative_note(figure), _other_outcome_note(outcome, findings.measures["other_risk_ratio"])]
     if key == "odds_ratio":
-        fragments.append(conversion_text(findings.conversion, names.risk_name(outcome)))
+        fragments.append(conversion_text(findings.conversion, outcome))
     return tuple(fragments)
 
 
@@ -143,7 +141,7 @@ def _other_outcome_note(outcome: Outcome, figure: Figure | AnyNumberNeeded | Gap
     return f"ratio of {names.not_counted(outcome)} {numbers.ratio(figure.estimate)}{interval}"
 
 
-def conversion_text(conversion: Conversion | Gap, risk: str) -> str:
+def conversion_text(conversion: Conversion | Gap, outcome: Outcome) -> str:
     """The odds ratio as a risk ratio at a typed starting risk: "as a risk ratio at 12%: 0.52 (0.35 to 0.77)".
 
     Nothing at the study's own: there it is the risk ratio, which has a line of its own.
@@ -155,11 +153,12 @@ def conversion_text(conversion: Conversion | Gap, risk: str) -> str:
     figure = conversion.risk_ratio
     interval = limits.ratio_interval(figure.interval, figure.estimate)
     return (
-        f"as a {risk} ratio at {baseline_text(conversion.baseline, conversion.baseline_from)}: "
+        f"as a {names.risk_name(outcome)} ratio at {baseline_text(conversion, outcome)}: "
         f"{numbers.ratio(conversion.risk_ratio.estimate)}{limits.bracketed(interval)}"
     )
 
 
-def baseline_text(baseline: float, origin: Literal["reference", "given"]) -> str:
-    """A starting risk: as typed, or the study's own with its one decimal."""
-    return numbers.percent_given(baseline) if origin == "given" else numbers.percent(baseline)
+def baseline_text(conversion: Conversion, outcome: Outcome) -> str:
+    """Its starting risk: as typed, or with one decimal where it is the study's own or worked out."""
+    typed = conversion.baseline_from == "given" and outcome.patient.start_kind in ("one", "three")
+    return numbers.percent_given(conversion.baseline) if typed else numbers.percent(conversion.baseline)

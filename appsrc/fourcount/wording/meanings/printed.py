@@ -17,7 +17,7 @@ NO_RISKS = "by itself it does not say how large the {risk}s are"
 NO_RATES = "by itself it does not say how large the rates are"
 NO_START = "by itself it does not say from which {risk}"
 NO_SHARES = "odds are not shares of people"
-NO_RISK_RATIO = "it compares rates from moment to moment, and is no {risk} ratio"
+NO_RISK_RATIO = "it compares rates from moment to moment: it is no {risk} ratio"
 
 
 def effect(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFindings, choices: Choices) -> str:
@@ -69,7 +69,7 @@ def _claim(key: str, outcome: Outcome, figure: Figure, findings: OutcomeFindings
         return f"the odds that a person {index} {event} were {estimate} times those {reference}{interval}"
     if key == "hazard_ratio":
         return (
-            f"at any moment, among people still without it, the rate of the event {index} was "
+            f"at any moment, among people who have not had the event yet, its rate {index} was "
             f"{estimate} times that {reference}{interval}"
         )
     if key in ("risk_ratio", "rate_ratio"):

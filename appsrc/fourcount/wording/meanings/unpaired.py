@@ -93,7 +93,7 @@ def odds_ratio(outcome: Outcome, figure: Figure, findings: OutcomeFindings, choi
     if isinstance(conversion, Gap) or isinstance(conversion.risk_ratio.estimate, Gap):
         return f"{claim}; odds are events per non-event, not shares of all people.{no_interval(figure)}"
     converted = conversion.risk_ratio
-    baseline = lines.baseline_text(conversion.baseline, conversion.baseline_from)
+    baseline = lines.baseline_text(conversion, outcome)
     interval = limits.bracketed(limits.ratio_interval(converted.interval, converted.estimate))
     ratio = numbers.ratio(conversion.risk_ratio.estimate)
     name = names.risk_name(outcome)

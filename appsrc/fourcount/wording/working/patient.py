@@ -72,9 +72,7 @@ def _from_rate(outcome: Outcome, patient: PatientFindings) -> str:
     if not isinstance(rate, RateReading) or span is None:
         return result
     a_year = rate.value * DAYS_IN["year"] / DAYS_IN[rate.unit]
-    return (
-        f"1 − exp(−{plain(a_year)} × {quantity(span.years)}) = {result}, the rate and the time in years"
-    )
+    return f"1 − exp(−{plain(a_year)} × {quantity(span.years)}) = {result}, the rate and the time in years"
 
 
 def _from_overall(outcome: Outcome) -> list[Row]:

@@ -60,7 +60,7 @@ def unpaired_rows(measure: str, outcome: Outcome, findings: OutcomeFindings, cho
     rows += interval_rows(measure, found, choices.level, findings.form, letters_of, unit=unit, how=how)
     rows += _divided(findings)
     if measure == "odds_ratio":
-        rows += [*_conversion_rows(findings.conversion, names.risk_name(outcome)), _conditional_row(counts)]
+        rows += [*_conversion_rows(findings.conversion, outcome), _conditional_row(counts)]
     if measure not in BY_LIMITS and behind is not None:
         arguments = _arguments(measure, behind)
         rows += other_methods(measure, found, METHOD_MEASURES[measure], arguments, choices.level)
@@ -168,11 +168,11 @@ def _lettered(measure: str, counts: FractionalCounts) -> object:
     return _arguments(measure, counts)[0]
 
 
-def _conversion_rows(conversion: Conversion | Gap, risk: str) -> list[Row]:
+def _conversion_rows(conversion: Conversion | Gap, outcome: Outcome) -> list[Row]:
     if isinstance(conversion, Gap):
         return []
     figure = conversion.risk_ratio
-    label = f"As a {risk} ratio at {lines.baseline_text(conversion.baseline, conversion.baseline_from)}"
+    label = f"As a {names.risk_name(outcome)} ratio at {lines.baseline_text(conversion, outcome)}"
     if isinstance(figure.estimate, Gap):
         return [(label, gap_text(figure.estimate))]
     interval = limits.bracketed(limits.ratio_interval(figure.interval, figure.estimate))

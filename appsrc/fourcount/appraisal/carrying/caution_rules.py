@@ -4,9 +4,8 @@ from __future__ import annotations
 
 import math
 
-from fourcount.appraisal.case import Case, Facts, no_effect_of, value
-from fourcount.appraisal.extras.e_values import OBSERVATIONAL
-from fourcount.appraisal.findings import Gap, PatientFindings, PrintedFigure
+from fourcount.appraisal.case import Case, Facts, at_start, no_effect_of, value
+from fourcount.appraisal.findings import Counts, Gap, PatientFindings, PrintedFigure
 
 OUTSIDE = ("case-control", "matched")
 """The designs whose starting risk is never the study's own."""
@@ -25,36 +24,36 @@ CRUDE = (
 
 def effect_kept_constant(case: Case) -> Facts | None:
     """The study's relative effect is taken to hold at another starting risk, one that is not printed as the same."""
-    carried, study = case.carried, study_risk(case)
+    carried, study = _moved(case), study_risk(case)
     if carried is None or study is None or carried.effect == "risk_difference":
         return None
     effect = value(carried.carried)
     if effect is None or _printed_alike(carried.baseline, study):
         return None
-    facts: Facts = {"effect": carried.effect, "value": effect, "baseline": carried.baseline, "study": study}
-    return {**facts, **_survey(case)}
+    other = _other_risk(carried.baseline, study, effect) if carried.effect == "risk_ratio" else {}
+    return {**_effect(carried), "value": effect, **at_start(carried), "study": study, **other, **_survey(case)}
 
 
 def kept_elsewhere(case: Case) -> Facts | None:
     """An effect is taken to hold at a starting risk whose distance from the study's is not known."""
-    carried = case.carried
+    carried = _moved(case)
     effect = None if carried is None else value(carried.carried)
     if carried is None or effect is None or carried.effect == "risk_difference" or study_risk(case) is not None:
         return None
-    # Of a table of cases and controls, that all rests on the starting risk says as much.
-    if case.outcome.design in OUTSIDE and not isinstance(case.given, PrintedFigure):
+    # Of cases and controls, that all rests on the starting risk says as much.
+    if case.outcome.design in OUTSIDE:
         return None
-    return {"effect": carried.effect, "value": effect, "baseline": carried.baseline, **_survey(case)}
+    return {**_effect(carried), "value": effect, **at_start(carried), **_survey(case)}
 
 
 def difference_kept_constant(case: Case) -> Facts | None:
     """A difference varies with the starting risk more than a ratio does."""
-    carried, study = case.carried, study_risk(case)
+    carried, study = _moved(case), study_risk(case)
     if carried is None or carried.effect != "risk_difference":
         return None
     if study is None:
-        return {"baseline": carried.baseline}
-    return None if _printed_alike(carried.baseline, study) else {"baseline": carried.baseline, "study": study}
+        return at_start(carried)
+    return None if _printed_alike(carried.baseline, study) else {**at_start(carried), "study": study}
 
 
 def baseline_far(case: Case) -> tuple[Facts, ...]:
@@ -63,11 +62,9 @@ def baseline_far(case: Case) -> tuple[Facts, ...]:
     if study is None or isinstance(case.patient, Gap):
         return ()
     others = (one for one in (case.patient.low, case.patient.high) if isinstance(one, PatientFindings))
-    asked = [one.baseline for one in (carried, *others) if one is not None]
+    asked = {one.baseline: one for one in (carried, *others) if one is not None}
     return tuple(
-        {"baseline": baseline, "study": study}
-        for baseline in dict.fromkeys(asked)
-        if not study / 2 <= baseline <= study * 2
+        {**at_start(one), "study": study} for baseline, one in asked.items() if not study / 2 <= baseline <= study * 2
     )
 
 
@@ -76,20 +73,22 @@ def baseline_uncertain(case: Case) -> Facts | None:
     carried = case.carried
     if carried is None or carried.range_from != "effect" or carried.start_from == "overall":
         return None
-    if isinstance(carried.difference.estimate, Gap) or isinstance(carried.difference.interval, Gap):
-        return None
+    interval = carried.difference.interval
+    if isinstance(carried.difference.estimate, Gap) or isinstance(interval, Gap) or interval.low == interval.high:
+        return None  # at a risk that no effect moves there is no range
     # A difference kept constant has the same limits at every starting risk.
     if carried.effect == "risk_difference" and carried.other_span is None:
         return None
-    return _at(carried)
+    return at_start(carried)
 
 
 def rests_on_baseline(case: Case) -> Facts | None:
-    """In a case-control study every absolute figure rests on the starting risk."""
+    """In a case-control study every absolute figure rests on the starting risk; ``totals`` are no risks there."""
     carried = case.carried
     if carried is None or case.outcome.design not in OUTSIDE:
         return None
-    return {"baseline": carried.baseline, "effect": carried.effect}
+    facts: Facts = {**at_start(carried), **_effect(carried)}
+    return {**facts, "totals": "sampled"} if isinstance(case.given, Counts) else facts
 
 
 def solved_from_overall(case: Case) -> Facts | None:
@@ -97,22 +96,22 @@ def solved_from_overall(case: Case) -> Facts | None:
     carried = case.carried
     if carried is None or carried.start_from != "overall":
         return None
-    return {"baseline": carried.baseline, "effect": carried.effect, **_survey(case)}
+    return {**at_start(carried), **_effect(carried), **_survey(case)}
 
 
 def from_a_rate(case: Case) -> Facts | None:
     """The starting risk is that of a rate which stays the same."""
     carried = case.carried
-    # That hazards are taken to stay constant, for another time span, says as much.
-    if carried is None or carried.start_from != "rate" or carried.other_span is not None:
+    # That hazards stay constant, for another time span, and that both groups' rates do, say as much.
+    if carried is None or carried.start_from != "rate" or carried.effect == "rate_ratio" or _between_spans(carried):
         return None
-    return {"baseline": carried.baseline}
+    return at_start(carried)
 
 
 def controls_over_time(case: Case) -> Facts | None:
     """The odds ratio of a case-control study is carried: it must not be if it is a rate ratio."""
-    carried = case.carried
-    return {} if carried is not None and case.outcome.design in OUTSIDE and carried.effect == "odds_ratio" else None
+    carried, design = case.carried, case.outcome.design
+    return {"design": design} if carried is not None and design in OUTSIDE and carried.effect == "odds_ratio" else None
 
 
 def within_pairs(case: Case) -> Facts | None:
@@ -122,35 +121,14 @@ def within_pairs(case: Case) -> Facts | None:
 
 
 def constant_rates(case: Case) -> Facts | None:
-    """A rate ratio is carried as a hazard ratio is."""
+    """A rate ratio is carried as a hazard ratio is; for another time span, that hazards stay constant says as much."""
     carried = case.carried
-    return {} if carried is not None and carried.effect == "rate_ratio" else None
+    return {} if carried is not None and carried.effect == "rate_ratio" and not _between_spans(carried) else None
 
 
 def other_span(case: Case) -> Facts | None:
     """Risks are carried to another time span, as if hazards stayed constant."""
-    return None if isinstance(case.patient, Gap) or case.patient.other_span is None else {}
-
-
-def crude_carried(case: Case) -> Facts | None:
-    """Outside trials a crude effect is carried; ``beside`` says that the paper's adjusted one could be instead."""
-    carried = case.carried
-    if carried is None or carried.adjusted or case.outcome.design not in OBSERVATIONAL:
-        return None
-    facts: Facts = {"effect": carried.effect, "baseline": carried.baseline, **_survey(case)}
-    if case.pooled is not None:
-        facts["strata"] = len(case.pooled.strata)
-    return {**facts, "beside": "adjusted"} if any(one.adjusted for one in case.carriable) else facts
-
-
-def converted_limits(case: Case) -> Facts | None:
-    """The odds ratio is carried, and its limits were converted at a bare starting risk; adjusted ones say so."""
-    carried, conversion = case.carried, case.conversion
-    if carried is None or carried.effect != "odds_ratio" or carried.adjusted or carried.range_from != "effect":
-        return None
-    if isinstance(conversion, Gap) or conversion.baseline_from != "given":
-        return None
-    return None if isinstance(conversion.risk_ratio.interval, Gap) else {"baseline": conversion.baseline}
+    return {} if isinstance(case.patient, PatientFindings) and _between_spans(case.patient) else None
 
 
 def adjusted_converted(case: Case) -> Facts | None:
@@ -158,7 +136,7 @@ def adjusted_converted(case: Case) -> Facts | None:
     carried = case.carried
     if carried is None or carried.effect != "odds_ratio" or not carried.adjusted:
         return None
-    return _at(carried)
+    return at_start(carried)
 
 
 def adjusted_opposite(case: Case) -> Facts | None:
@@ -192,15 +170,46 @@ def study_risk(case: Case) -> float | None:
     return value(case.figures.get("risk_reference") or case.figures.get("pair_risk_reference"))
 
 
+def _moved(case: Case) -> PatientFindings | None:
+    """The patient, or of three the first, whose risk the effect moves to another one that can be given."""
+    patient = case.carried
+    if patient is None:
+        return None
+    for one in (patient, patient.low, patient.high):
+        if isinstance(one, PatientFindings) and not isinstance(one.with_.estimate, Gap):
+            stays = (0.0,) if one.effect == "risk_ratio" else () if one.effect == "risk_difference" else (0.0, 1.0)
+            if one.baseline not in stays:
+                return one
+    return None
+
+
+def _other_risk(baseline: float, study: float, ratio: float) -> Facts:
+    """What keeping the risk ratio of not having the event would make of the starting risk, where people see that.
+
+    Both ratios say the same at the study's own risk, and part elsewhere.
+    """
+    if study >= 1.0 or ratio * study > 1.0:
+        return {}
+    becomes, other = ratio * baseline, 1.0 - (1.0 - baseline) * (1.0 - ratio * study) / (1.0 - study)
+    people = 100 if min(becomes, other) >= 0.01 else 1000
+    if round(becomes * people) == round(other * people):
+        return {}
+    return {"other": other if other >= 0.0 else "less than 0%", "becomes": becomes}
+
+
+def _effect(carried: PatientFindings) -> Facts:
+    """The kind of effect, and that it is an adjusted one where it is."""
+    return {"effect": carried.effect, **({"adjusted": "adjusted"} if carried.adjusted else {})}
+
+
 def _adjusted_beside_counts(case: Case) -> PatientFindings | None:
     carried = case.carried
     return carried if carried is not None and carried.adjusted and not isinstance(case.given, PrintedFigure) else None
 
 
-def _at(carried: PatientFindings) -> Facts:
-    """The starting risk, and that it is the study's own where it is: it has that one's digits then."""
-    facts: Facts = {"baseline": carried.baseline}
-    return {**facts, "start": "reference"} if carried.start_from == "reference" else facts
+def _between_spans(carried: PatientFindings) -> bool:
+    """Whether risks are carried from one time span to another; a rate gives a risk over any span by itself."""
+    return carried.other_span is not None and carried.study_span is not None
 
 
 def _sides(case: Case) -> Facts:

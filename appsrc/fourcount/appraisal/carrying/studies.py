@@ -8,7 +8,7 @@ from fourcount.appraisal.carrying.effects import carriable_of
 from fourcount.appraisal.carrying.study import OwnRisks, Study
 from fourcount.appraisal.extras.printed import ReadEffect
 from fourcount.appraisal.findings import Carriable, CarriedEffect, Figure, Gap
-from fourcount.appraisal.gating import Support
+from fourcount.appraisal.gating import SUPPORT, Support
 from fourcount.record.outcome import Outcome
 
 OF_RISKS: Mapping[CarriedEffect, str] = {"risk_ratio": "risk_ratio", "risk_difference": "risk_difference"}
@@ -19,18 +19,22 @@ OF_PAIRS: Mapping[CarriedEffect, str] = {
 }
 """The measure behind each effect of a form, the usual one first."""
 
+OWN = ("risk_index", "risk_reference", "risk_difference", "risk_ratio")
+OWN_OF_PAIRS = ("pair_risk_index", "pair_risk_reference", "pair_difference", "pair_ratio")
+"""Both risks, and what parts them."""
+
 
 def study_of_counts(
     outcome: Outcome, figures: Mapping[str, Figure], support: Support, adjusted: ReadEffect, level: float
 ) -> Study:
     """Of one unpaired table."""
     if support.refused:
-        return Study(outcome=outcome, carriable=(), refused=Gap(support.refused))
+        return refused_study(outcome, support.refused)
     crude = of_figures(figures, {effect: effect for effect in support.carries}, level)
     return Study(
         outcome=outcome,
         carriable=carriable_of(outcome, crude.values(), adjusted),
-        own=own_risks(figures, "", level) if support.own_starting_risk else None,
+        own=own_risks(figures, OWN, level) if support.own_starting_risk else None,
         needs="case-control-needs-baseline",
         odds_ratio=crude.get("odds_ratio"),
         number_needed=support.patient_number_needed,
@@ -42,7 +46,7 @@ def study_of_strata(
 ) -> Study:
     """Of several strata: the pooled effects. Each stratum has a risk of its own, so none is taken from here."""
     if support.refused:
-        return Study(outcome=outcome, carriable=(), refused=Gap(support.refused))
+        return refused_study(outcome, support.refused)
     crude = of_figures(pooled, {effect: f"pooled_{effect}" for effect in support.carries}, level)
     return Study(
         outcome=outcome,
@@ -60,21 +64,25 @@ def study_of_pairs(
     """Of pairs: the paired effects, and both sides' own risks where the pairs that agree are known."""
     refused = withheld.get("pair_odds_ratio")
     if refused:
-        return Study(outcome=outcome, carriable=(), refused=Gap(refused))
+        return refused_study(outcome, refused)
     matched = outcome.design == "matched"
     needed = withheld.get("number_needed")
     return Study(
         outcome=outcome,
         carriable=carriable_of(outcome, of_figures(figures, OF_PAIRS, level).values(), adjusted),
-        own=own_risks(figures, "pair_", level, related=True),
+        own=own_risks(figures, OWN_OF_PAIRS, level, related=True),
         needs="case-control-needs-baseline" if matched else "pairs-need-baseline",
         # Pairs that agree are needed for the study's own number needed, and the patient has a risk without them.
         number_needed=None if needed in ("concordant-pairs-unknown", "design-matched") else needed,
     )
 
 
-def study_of_rates(outcome: Outcome, figures: Mapping[str, Figure], adjusted: ReadEffect, level: float) -> Study:
+def study_of_rates(
+    outcome: Outcome, figures: Mapping[str, Figure], withheld: Mapping[str, str], adjusted: ReadEffect, level: float
+) -> Study:
     """Of person-time: the rate ratio, carried as a hazard ratio is. A rate is no risk, so one has to be typed."""
+    if "rate_ratio" in withheld:
+        return refused_study(outcome, withheld["rate_ratio"])
     crude = of_figures(figures, {"rate_ratio": "rate_ratio"}, level)
     return Study(
         outcome=outcome,
@@ -85,16 +93,23 @@ def study_of_rates(outcome: Outcome, figures: Mapping[str, Figure], adjusted: Re
 
 
 def study_of_risks(
-    outcome: Outcome, figures: Mapping[str, Figure], support: Support, adjusted: ReadEffect, level: float
+    outcome: Outcome, figures: Mapping[str, Figure], withheld: Mapping[str, str], adjusted: ReadEffect, level: float
 ) -> Study:
     """Of two printed risks at one time."""
+    if "risk_ratio" in withheld:
+        return refused_study(outcome, withheld["risk_ratio"])
     return Study(
         outcome=outcome,
         carriable=carriable_of(outcome, of_figures(figures, OF_RISKS, level).values(), adjusted),
-        own=own_risks(figures, "", level),
+        own=own_risks(figures, OWN, level),
         needs="no-starting-risk",
-        number_needed=support.patient_number_needed,
+        number_needed=SUPPORT[outcome.design].patient_number_needed,
     )
+
+
+def refused_study(outcome: Outcome, reason: str) -> Study:
+    """Of a table that says nothing in its design, and carries nobody."""
+    return Study(outcome=outcome, carriable=(), refused=Gap(reason))
 
 
 def of_figures(
@@ -108,12 +123,11 @@ def of_figures(
     }
 
 
-def own_risks(figures: Mapping[str, Figure], prefix: str, level: float, *, related: bool = False) -> OwnRisks | None:
+def own_risks(
+    figures: Mapping[str, Figure], keys: tuple[str, ...], level: float, *, related: bool = False
+) -> OwnRisks | None:
     """Both risks with what parts them; None where the form or the design withholds one."""
-    names = ("risk_index", "risk_reference", "difference", "ratio") if prefix else (
-        "risk_index", "risk_reference", "risk_difference", "risk_ratio"
-    )  # fmt: skip
-    found = [figures.get(f"{prefix}{name}") for name in names]
+    found = [figures.get(key) for key in keys]
     index, reference, difference, ratio = found
     if index is None or reference is None or difference is None or ratio is None:
         return None

@@ -1,0 +1,77 @@
+"""The patient's page as one object on the screen, and the area that it is scrolled in."""
+
+from __future__ import annotations
+
+from PySide6.QtCore import QSize, Qt
+from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent, QPen
+from PySide6.QtWidgets import QScrollArea, QWidget
+
+from fourcount.face.on_white import OnWhite
+from fourcount.ink.paper_style import PaperStyle
+from fourcount.ink.patient_page import MARGIN, PatientPage
+from fourcount.ink.plain_picture import Shown
+
+
+class Canvas(QWidget):
+    """The page as one object: painted, and described in full sentences."""
+
+    def __init__(self, look: OnWhite) -> None:
+        super().__init__()
+        self._look = look
+        self._page: PatientPage | None = None
+        self._style: PaperStyle | None = None
+        self._room = QSize()
+        self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
+        look.changed.connect(self._fit)
+
+    def show_page(self, it: Shown) -> None:
+        """Show another outcome."""
+        self._page = PatientPage(it)
+        self.setAccessibleName(it.words.title)
+        self.setAccessibleDescription(it.words.told(ranged=it.options.uncertainty))
+        self._fit()
+
+    @property
+    def margin(self) -> int:
+        """How far the page's text stands from its edges."""
+        return self._style.px(MARGIN) if self._style else 0
+
+    def take_room(self, room: QSize) -> None:
+        """Fill the room that there is; what needs more can be scrolled to."""
+        if room != self._room:
+            self._room = room
+            self._fit()
+
+    def _fit(self) -> None:
+        if self._page is not None and not self._room.isEmpty():
+            self._style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
+            tall = max(float(self._room.height()), self._page.least_height(self._style, self._room.width()))
+            self.setFixedSize(self._room.width(), round(tall))
+        self.update()
+
+    def paintEvent(self, event: QPaintEvent) -> None:
+        if self._page is None or self._style is None:
+            return
+        painter = QPainter(self)
+        painter.setRenderHint(QPainter.RenderHint.Antialiasing)
+        self._page.draw(painter, self._style, self.width(), self.height())
+        if self.hasFocus() and self.height() > self._room.height():
+            painter.setPen(QPen(self._look.colour("accent"), 2))
+            painter.setBrush(Qt.BrushStyle.NoBrush)  # what painted the page last may have left one
+            painter.drawRect(self.rect().adjusted(1, 1, -1, -1))
+        painter.end()
+
+    def focusInEvent(self, event: QFocusEvent) -> None:
+        super().focusInEvent(event)
+        self.update()
+
+    def focusOutEvent(self, event: QFocusEvent) -> None:
+        super().focusOutEvent(event)
+        self.update()
+
+
+class Scroll(QScrollArea):
+    """A scroll area that leaves every key to the screen: arrows to the side are outcomes here."""
+
+    def keyPressEvent(self, event: QKeyEvent) -> None:
+        event.ignore()
