@@ -187,10 +187,11 @@ def test_a_broken_off_window_is_offered(
     window = open_window()
     window.files.offer()
     (offer,) = offered
-    assert offer.aside[1:] == ["Not saved yet", "Falls: 38 · 374 · 70 · 339", "Poor sleep: 62 · 350 · 49 · 360"]
-    assert offer.aside[0][-5:-3].isdigit()
-    assert offer.file[0].startswith("paper.fourcount, ")
-    assert offer.file[1] == "Night lights on a rehabilitation ward"
+    assert offer.aside[0] == "for paper.fourcount"
+    assert offer.aside[2:] == ["Not saved yet", "Falls: 38 · 374 · 70 · 339", "Poor sleep: 62 · 350 · 49 · 360"]
+    assert offer.aside[1][-5:-3].isdigit()
+    assert offer.file[0] == "paper.fourcount"
+    assert offer.file[2] == "Night lights on a rehabilitation ward"
     assert offer.notes == [words.OFFER_UNDO]
     assert window.session.record == Record()
     assert paper.read_bytes() == before

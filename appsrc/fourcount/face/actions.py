@@ -144,8 +144,8 @@ def add_later(window: QMainWindow, menus: dict[str, QMenu], actions: dict[str, Q
             menu.insertAction(actions[PLACES[command.key]], made[command.key])
         else:
             menu.addAction(made[command.key])
-    for key in ("save", "handout"):
-        menus["file"].insertSeparator(made[key])
+    for before in (made["save"], made["handout"], actions["quit"]):
+        menus["file"].insertSeparator(before)
     menus["view"].insertSeparator(actions["bigger"])
     menus["view"].insertMenu(actions["more"], menus["picture"])
     menus["table"].addSeparator()

@@ -36,6 +36,8 @@ def offer_of(orphan: Orphan) -> Offer:
     """Put both states into words; the file is read for it and not touched."""
     head, found = orphan.head, orphan.found
     aside = [when_text(head.when)] if head else []
+    if head and head.file:
+        aside.insert(0, words.OFFER_FOR.format(name=named(Path(head.file))))
     if isinstance(found, str):
         return Offer([*aside, words.OFFER_BROKEN.format(reason=found)], [], [], can_open=False, saved=None, path=None)
     aside += record_lines(found)
@@ -45,7 +47,7 @@ def offer_of(orphan: Orphan) -> Offer:
     opened = open_file(path)
     if isinstance(opened, str):
         return Offer(aside, [opened], [], can_open=True, saved=None, path=path)
-    file = [f"{named(path)}, {_saved_when(path)}", *record_lines(opened.record)]
+    file = [named(path), _saved_when(path), *record_lines(opened.record)]
     notes = [words.OFFER_SAME if opened.record == found else words.OFFER_UNDO]
     if head and digest_of(opened.data) != head.digest:
         notes.insert(0, words.OFFER_CHANGED)
@@ -86,16 +88,17 @@ class RecoverDialog(QDialog):
         self.opens = self._button(words.OFFER_OPEN, roles.AcceptRole) if offer.can_open else None
         (self.opens or self.waits).setDefault(True)
         self._buttons.clicked.connect(self._on_clicked)
-        column.addStretch(1)
         column.addWidget(self._buttons)
-        self.resize(look.px(680), self.sizeHint().height())
+        width = look.px(680)
+        self.resize(width, column.totalHeightForWidth(width))
 
     def _side(self, head: str, lines: list[str]) -> QVBoxLayout:
         side = QVBoxLayout()
         side.setSpacing(self._look.px(4))
         side.addWidget(Words(self._look, "strong", "ink", head))
-        for place, line in enumerate(line for line in lines if line):
-            side.addWidget(Words(self._look, "body", "muted" if place == 0 and len(lines) > 1 else "ink", line))
+        for line in lines:
+            if line:
+                side.addWidget(Words(self._look, "body", "ink", line))
         side.addStretch(1)
         return side
 
