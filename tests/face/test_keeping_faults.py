@@ -82,6 +82,17 @@ def test_a_folder_of_that_name(example: Hands, answers: Answers, tmp_path: Path)
     assert list((tmp_path / "a.fourcount").iterdir()) == []
 
 
+@pytest.mark.skipif(not hasattr(os, "mkfifo"), reason="this system has no pipes with names")
+def test_what_is_no_ordinary_file_is_not_replaced(tmp_path: Path) -> None:
+    """A pipe or a device stays what it is; a name that none can have is no file elsewhere."""
+    pipe = tmp_path / "pipe"
+    os.mkfifo(pipe)
+    assert write_whole(pipe, b"new", None) == whole_file.Written(reason=words.A_DEVICE)
+    assert pipe.is_fifo()
+    assert write_whole(tmp_path / "a\0b", b"new", None) == whole_file.Written(reason=words.NO_NAME)
+    assert [path.name for path in tmp_path.iterdir()] == ["pipe"]
+
+
 @pytest.mark.skipif(ROOT, reason="for root no file is read-only")
 def test_a_read_only_folder(example: Hands, answers: Answers, paper: Path) -> None:
     """The system's own reason stands in the sentence; the old file stays."""

@@ -7,7 +7,7 @@ from pathlib import Path
 from typing import NamedTuple
 
 from PySide6.QtCore import Qt
-from PySide6.QtGui import QIcon
+from PySide6.QtGui import QIcon, QShowEvent
 from PySide6.QtWidgets import QDialog, QDialogButtonBox, QHBoxLayout, QPushButton, QVBoxLayout, QWidget
 
 from fourcount.face.keeping import named
@@ -89,8 +89,12 @@ class RecoverDialog(QDialog):
         (self.opens or self.waits).setDefault(True)
         self._buttons.clicked.connect(self._on_clicked)
         column.addWidget(self._buttons)
-        width = look.px(680)
-        self.resize(width, column.totalHeightForWidth(width))
+        self._column = column
+
+    def showEvent(self, event: QShowEvent) -> None:
+        width = self._look.px(680)
+        self.resize(width, self._column.totalHeightForWidth(width))  # known once every line has its font
+        super().showEvent(event)
 
     def _side(self, head: str, lines: list[str]) -> QVBoxLayout:
         side = QVBoxLayout()

@@ -53,8 +53,12 @@ def write_whole(path: Path, data: bytes, known: str | None) -> Written:
     before it is replaced, it stays as it is and this is a conflict; None writes over anything. A file that is gone is
     nothing to lose.
     """
+    if "\0" in str(path):
+        return Written(reason=words.NO_NAME)
     if os.path.isdir(path):  # noqa: PTH112 -- asks without raising where a folder may not be looked into
         return Written(reason=words.A_FOLDER)
+    if os.path.exists(path) and not os.path.isfile(path):  # noqa: PTH110, PTH113 -- likewise
+        return Written(reason=words.A_DEVICE)  # a pipe or a device would be replaced by a file
     if not os.path.isdir(path.parent):  # noqa: PTH112 -- likewise
         return Written(reason=words.NO_FOLDER.format(folder=specimen(str(path.parent))))
     file = QSaveFile(str(path))
