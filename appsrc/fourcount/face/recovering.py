@@ -79,8 +79,8 @@ class RecoverDialog(QDialog):
         if offer.file:
             sides.addLayout(self._side(words.OFFER_FILE, offer.file), 1)
         column.addLayout(sides)
-        for note in offer.notes:
-            column.addWidget(Words(look, "body", "muted", note))
+        if offer.notes:
+            column.addWidget(Words(look, "body", "muted", "\n".join(offer.notes)))
         self._buttons = QDialogButtonBox()
         roles = QDialogButtonBox.ButtonRole
         self.waits = self._button(words.OFFER_LATER, roles.RejectRole)
@@ -88,6 +88,7 @@ class RecoverDialog(QDialog):
         self.opens = self._button(words.OFFER_OPEN, roles.AcceptRole) if offer.can_open else None
         (self.opens or self.waits).setDefault(True)
         self._buttons.clicked.connect(self._on_clicked)
+        column.addStretch(1)
         column.addWidget(self._buttons)
         self._column = column
 
@@ -100,9 +101,7 @@ class RecoverDialog(QDialog):
         side = QVBoxLayout()
         side.setSpacing(self._look.px(4))
         side.addWidget(Words(self._look, "strong", "ink", head))
-        for line in lines:
-            if line:
-                side.addWidget(Words(self._look, "body", "ink", line))
+        side.addWidget(Words(self._look, "body", "ink", "\n".join(line for line in lines if line)))
         side.addStretch(1)
         return side
 
