@@ -9,7 +9,7 @@ from PySide6.QtGui import QColor, QImage, QPainter
 from fourcount.appraisal.appraise import appraise
 from fourcount.ink.palette import PAPER, contrast
 from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
-from fourcount.ink.patient_page import PatientPage
+from fourcount.ink.patient_page import BELOW_HEADLINE, PatientPage
 from fourcount.ink.plain_picture import Shown, picture_words, shown
 from fourcount.picture.options import USUAL
 from fourcount.record.outcome import Outcome
@@ -51,6 +51,43 @@ def test_all_of_the_page_is_inside_it(name: str, room: tuple[int, int]) -> None:
     """Whatever the outcome and the room, nothing is drawn below the page's own height."""
     image, tall = drawn(SHOWN[name], room)
     assert last_row(image) < tall
+
+
+@pytest.mark.parametrize("zoom", [1.5, 2.0])
+@pytest.mark.parametrize("room", ROOMS, ids=str)
+@pytest.mark.parametrize("name", SHOWN)
+def test_a_page_that_is_scrolled_holds_all_too(name: str, room: tuple[int, int], zoom: float) -> None:
+    """With its headline first and its key above its people, nothing is drawn below the page's height either."""
+    page, (width, height) = PatientPage(ready(SHOWN[name], uncertainty=True)), room
+    fit = page.fitted(width, height, zoom)
+    assert fit.height >= height
+    assert fit.headline_first == (fit.height > height)
+    image = QImage(width, round(fit.height) + 60, QImage.Format.Format_RGB32)
+    image.fill(QColor("#FFFFFF"))
+    painter = QPainter(image)
+    page.draw(painter, fit.style, width, fit.height, fit.headline_first)
+    painter.end()
+    assert last_row(image) < fit.height
+
+
+def people_height(outcome: Outcome, room: tuple[int, int], zoom: float) -> int:
+    """How much of the page its people take."""
+    page, (width, height) = PatientPage(ready(outcome)), room
+    fit = page.fitted(width, height, zoom)
+    wide = page._wide(fit.style, width)
+    picture = page._key_first if fit.headline_first else page._picture
+    extra = fit.style.px(BELOW_HEADLINE) if fit.headline_first else 0
+    left = fit.height - page._text_height(fit.style, wide) - extra
+    return round(picture.people_height(fit.style, wide, left))
+
+
+@pytest.mark.parametrize("outcome", [TRIAL, WELCOME, SMALL], ids=["hundred", "welcome", "thousand"])
+@pytest.mark.parametrize("room", [(1280, 740), (1366, 700)], ids=str)
+def test_people_are_no_smaller_at_larger_text(outcome: Outcome, room: tuple[int, int]) -> None:
+    """At 150 and 200% text the arrays are at least as high as at 100%, and the page is scrolled instead."""
+    usual = people_height(outcome, room, 1.0)
+    for zoom in (1.5, 2.0):
+        assert people_height(outcome, room, zoom) >= usual
 
 
 @pytest.mark.parametrize("zoom", [1.0, 1.5, 2.0])

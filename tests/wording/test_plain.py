@@ -288,3 +288,15 @@ def test_a_hazard_ratio_alone_gives_people(say: Callable[..., PlainWords]) -> No
     """A printed hazard ratio at a typed risk: 1 - 0.8 to the power of 0.72 is 14.8%."""
     words = say(HAZARD)
     assert (words.without.number, words.with_.number) == ("20 in 100", "15 in 100")
+
+
+@pytest.mark.parametrize(
+    "field", ["left_words_text", "right_words_text", "name_text", "first_label_text", "second_label_text"]
+)
+def test_names_of_any_length_leave_the_page_its_numbers(field: str, say: Callable[..., PlainWords]) -> None:
+    """A name that goes on for pages is cut where it can be seen to go on; every number stands behind it."""
+    words = say(replace(AT_TWELVE, **{field: "had a fall that went on " * 80}))
+    assert "…" in words.told()
+    assert len(words.told()) < 2_500
+    for part in ("12 in 100", "6 fewer of these 100", "94 in 100"):
+        assert part in words.told()

@@ -7,8 +7,7 @@ from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent, QPen
 from PySide6.QtWidgets import QScrollArea, QWidget
 
 from fourcount.face.on_white import OnWhite
-from fourcount.ink.paper_style import PaperStyle
-from fourcount.ink.patient_page import MARGIN, PatientPage
+from fourcount.ink.patient_page import MARGIN, Fit, PatientPage
 from fourcount.ink.plain_picture import Shown
 
 
@@ -19,8 +18,9 @@ class Canvas(QWidget):
         super().__init__()
         self._look = look
         self._page: PatientPage | None = None
-        self._style: PaperStyle | None = None
+        self._laid: Fit | None = None
         self._room = QSize()
+        self._usual_height = 0
         self.setFocusPolicy(Qt.FocusPolicy.StrongFocus)
         look.changed.connect(self._fit)
 
@@ -34,27 +34,28 @@ class Canvas(QWidget):
     @property
     def margin(self) -> int:
         """How far the page's text stands from its edges."""
-        return self._style.px(MARGIN) if self._style else 0
+        return self._laid.style.px(MARGIN) if self._laid else 0
 
-    def take_room(self, room: QSize) -> None:
-        """Fill the room that there is; what needs more can be scrolled to."""
-        if room != self._room:
-            self._room = room
+    def take_room(self, room: QSize, usual_height: int) -> None:
+        """Fill the room that there is, and would be at 100% text; what needs more can be scrolled to."""
+        if (room, usual_height) != (self._room, self._usual_height):
+            self._room, self._usual_height = room, usual_height
             self._fit()
 
     def _fit(self) -> None:
         if self._page is not None and not self._room.isEmpty():
-            self._style = self._page.style(self._room.width(), self._room.height(), self._look.asked)
-            tall = max(float(self._room.height()), self._page.least_height(self._style, self._room.width()))
-            self.setFixedSize(self._room.width(), round(tall))
+            self._laid = fit = self._page.fitted(
+                self._room.width(), self._room.height(), self._look.asked, self._usual_height
+            )
+            self.setFixedSize(self._room.width(), round(fit.height))
         self.update()
 
     def paintEvent(self, event: QPaintEvent) -> None:
-        if self._page is None or self._style is None:
+        if self._page is None or self._laid is None:
             return
         painter = QPainter(self)
         painter.setRenderHint(QPainter.RenderHint.Antialiasing)
-        self._page.draw(painter, self._style, self.width(), self.height())
+        self._page.draw(painter, self._laid.style, self.width(), self.height(), self._laid.headline_first)
         if self.hasFocus() and self.height() > self._room.height():
             painter.setPen(QPen(self._look.colour("accent"), 2))
             painter.setBrush(Qt.BrushStyle.NoBrush)  # what painted the page last may have left one

@@ -32,6 +32,9 @@ FORWARD = (Qt.Key.Key_Right, Qt.Key.Key_PageDown, Qt.Key.Key_N)
 BACKWARD = (Qt.Key.Key_Left, Qt.Key.Key_PageUp, Qt.Key.Key_B)
 ARROWS = (Qt.Key.Key_Left, Qt.Key.Key_Right, Qt.Key.Key_Up, Qt.Key.Key_Down)
 FOOT_MARGIN = 45
+USUAL_FOOT = 61
+"""How high the foot is, in pixels, at 100% text."""
+
 LINK_GAP = 18
 
 
@@ -235,7 +238,7 @@ class PatientScreen(QWidget):
         self._column.activate()
         room = self._scroll.size()
         bar = self._scroll.verticalScrollBar().sizeHint().width()
-        self.canvas.take_room(QSize(room.width() - bar, room.height()))
+        self.canvas.take_room(QSize(room.width() - bar, room.height()), self.height() - USUAL_FOOT)
         edge, above = self.canvas.margin or self._look.px(FOOT_MARGIN), self._look.px(10)
         self._foot_row.setContentsMargins(edge, above, edge + bar, above)  # as the page above it
 

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Sequence
+from typing import NamedTuple
 
 from PySide6.QtCore import QRectF
 from PySide6.QtGui import QColor, QPainter
@@ -26,11 +27,22 @@ DOUBT = 16
 WORTH_A_LINE = 0.2
 """How much smaller all text may be so that no count wraps."""
 
+BELOW_HEADLINE = 14
+"""More space than below other sentences, where the difference stands above the pictures."""
+
 STEPS = 12
 MARGIN = 45
 
 Spaced = tuple[Sequence[Run], float]
 """A paragraph and the space below it."""
+
+
+class Fit(NamedTuple):
+    """The page's style and height in its room; whether it is higher than that, and its headline stands first."""
+
+    style: PaperStyle
+    height: float
+    headline_first: bool
 
 
 class PatientPage:
@@ -42,6 +54,29 @@ class PatientPage:
         self._persons = it.options.icons == "person" and it.plan.denominator == 100  # larger crowds are marks
         self._range = it.options.uncertainty
         self._picture = PlainPicture(it)
+        self._key_first = PlainPicture(it, key_first=True)
+
+    def fitted(self, width: float, height: float, zoom: float = 1.0, usual_height: float = 0) -> Fit:
+        """How the page stands in its room, and in the higher one that it has at 100% text.
+
+        At larger text people are no smaller than they are then, and one scrolls instead.
+        """
+        style = self.style(width, height, zoom)
+        wide = self._wide(style, width)
+        text, picture = self._text_height(style, wide), self._picture.least_height(style, wide)
+        if zoom > 1:
+            people = self._people_height(width, max(height, usual_height))
+            picture = max(picture, self._picture.height_with(style, wide, people))
+        if text + picture <= height:
+            return Fit(style, height, False)
+        return Fit(style, text + picture + style.px(BELOW_HEADLINE), True)
+
+    def _people_height(self, width: float, height: float) -> float:
+        """How much of the page its people take at 100% text."""
+        style = self.style(width, height)
+        wide = self._wide(style, width)
+        room = max(height - self._text_height(style, wide), self._picture.least_height(style, wide))
+        return self._picture.people_height(style, wide, room)
 
     def style(self, width: float, height: float, zoom: float = 1.0) -> PaperStyle:
         """The largest text that fits the room, never smaller than the window's own at the reader's text size.
@@ -70,20 +105,43 @@ class PatientPage:
     def _wide(self, style: PaperStyle, width: float) -> float:
         return width - 2 * style.px(MARGIN)
 
-    def draw(self, painter: QPainter, style: PaperStyle, width: float, height: float) -> None:
-        """Draw the page in ``height``, which is at least ``least_height``."""
+    def draw(
+        self, painter: QPainter, style: PaperStyle, width: float, height: float, headline_first: bool = False
+    ) -> None:
+        """Draw the page in ``height``, which is at least ``least_height``.
+
+        ``headline_first`` says the difference before the pictures, and their key before their people: what matters most
+        is then seen before one scrolls.
+        """
         painter.fillRect(QRectF(0, 0, width, height), QColor(style.palette.page))
         x, y, wide = style.px(MARGIN), float(style.px(20)), self._wide(style, width)
-        room = max(height - self._text_height(style, wide), self._picture.least_height(style, wide))
-        for runs, gap in self._above(style, wide):
+        above, below = self._above(style, wide), self._below(style, wide)
+        picture, room = self._picture, height - self._text_height(style, wide)
+        if headline_first:
+            headline, below = below[: self._headlines(style, wide)], below[self._headlines(style, wide) :]
+            above = [*above, *headline[:-1], (headline[-1][0], headline[-1][1] + style.px(BELOW_HEADLINE))]
+            picture, room = self._key_first, room - style.px(BELOW_HEADLINE)
+        room = max(room, picture.least_height(style, wide))
+        for runs, gap in above:
             y += draw_paragraph(painter, x, y, wide, runs) + gap
-        y += self._picture.draw(painter, style, x, y, wide, room) + style.px(14)
-        for runs, gap in self._below(style, wide):
+        y += picture.draw(painter, style, x, y, wide, room) + style.px(14)
+        for runs, gap in below:
             y += draw_paragraph(painter, x, y, wide, runs) + gap
 
     def _text_height(self, style: PaperStyle, wide: float) -> float:
         paragraphs = (*self._above(style, wide), *self._below(style, wide))
         return sum(paragraph_height(runs, wide) + gap for runs, gap in paragraphs) + style.px(20 + 14)
+
+    def _headline(self, style: PaperStyle, wide: float) -> list[Sequence[Run]]:
+        """The difference, what the study leaves open of it, and that it is not what rounded counts make."""
+        words, ink, sentence = self._words, style.palette.ink, style.font("sentence")
+        said = beside_or_below([Run(words.summary, sentence, ink), Run(words.open_, sentence, ink)], wide)
+        rounded = [Run(words.rounded, style.font("body"), style.palette.muted)]
+        return [*said, rounded] if words.rounded else said
+
+    def _headlines(self, style: PaperStyle, wide: float) -> int:
+        """How many paragraphs that is."""
+        return len(self._headline(style, wide))
 
     def _above(self, style: PaperStyle, wide: float) -> list[Spaced]:
         words, ink, muted, body = self._words, style.palette.ink, style.palette.muted, style.font("body")
@@ -102,10 +160,8 @@ class PatientPage:
     def _below(self, style: PaperStyle, wide: float) -> list[Spaced]:
         """The difference with what makes it doubtful, which must not be missed; how sure one can be of it."""
         words, ink, muted, body = self._words, style.palette.ink, style.palette.muted, style.font("body")
-        sentence = style.font("sentence")
         said = [
-            *beside_or_below([Run(words.summary, sentence, ink), Run(words.open_, sentence, ink)], wide),
-            [Run(words.rounded, body, muted)],
+            *self._headline(style, wide),
             [Run(words.doubt, style.sized(DOUBT), ink)],
             [Run(words.which, body, ink), Run(words.certainty, body, ink), Run(words.study, body, muted)],
         ]

@@ -8,10 +8,13 @@ from typing import NamedTuple
 from PySide6.QtGui import QFont, QPainter
 
 from fourcount.appraisal.findings import Gap, OutcomeFindings
+from fourcount.ink.arrays import lay_array
 from fourcount.ink.paper_style import PaperStyle
 from fourcount.ink.paragraph import Run, draw_paragraph, paragraph_height
 from fourcount.ink.patient_picture import plan_of
-from fourcount.ink.picture import Picture
+from fourcount.ink.picture import WIDEST_ICON, Picture
+from fourcount.ink.picture_key import set_key
+from fourcount.ink.sheet import Sheet
 from fourcount.picture.bar_pair import bar_pair
 from fourcount.picture.options import USUAL, PictureOptions
 from fourcount.picture.plan import Plan, plan_on
@@ -69,13 +72,19 @@ def shown(
 
 
 class PlainPicture:
-    """The arrays under their captions; where one array stands under the other, each under its own."""
+    """The arrays under their captions; where one array stands under the other, each under its own.
 
-    def __init__(self, it: Shown) -> None:
+    ``key_first`` sets the key above the people, for pages of which not all is seen at once.
+    """
+
+    def __init__(self, it: Shown, key_first: bool = False) -> None:
         self._words = it.words
-        options = it.options._replace(relative=False)
+        self._options = options = it.options._replace(relative=False)
         words = picture_words(it)
         self._bare = Picture(it.plan, words, options._replace(captions=False))
+        self._key = self._bare.key if key_first else ()
+        if self._key:
+            self._bare = Picture(it.plan, words._replace(key=()), options._replace(captions=False))
         self._captioned = Picture(it.plan, words, options)
 
     def height(self, style: PaperStyle, width: float, within: float | None = None) -> float:
@@ -84,7 +93,18 @@ class PlainPicture:
 
     def least_height(self, style: PaperStyle, width: float) -> float:
         """Height below which its people could not be told apart."""
-        return self.height(style, width, 0) + (0 if self._bare.bars else style.px(LEAST_ARRAY))
+        least = self.height(style, width, 0) + (0 if self._bare.bars else style.px(LEAST_ARRAY))
+        return min(least, self.height(style, width))
+
+    def people_height(self, style: PaperStyle, width: float, within: float) -> float:
+        """How much higher than without any room its people are within a height; of one array, where two are stacked."""
+        spare = self.height(style, width, within) - self.height(style, width, 0)
+        return spare / self._stacked(style, width)
+
+    def height_with(self, style: PaperStyle, width: float, people: float) -> float:
+        """Height at which its people are as high as ``people_height`` told of another style or width."""
+        wanted = self.height(style, width, 0) + people * self._stacked(style, width)
+        return min(wanted, self.height(style, width))
 
     def good_height(self, style: PaperStyle, width: float) -> float:
         """Height at which its people weigh as much as the words, or all that it can use."""
@@ -124,8 +144,17 @@ class PlainPicture:
                 for block, (left, wide) in zip(blocks, columns, strict=True):
                     draw_paragraph(painter, x + left, y, wide, block[line])
             y += tall + gap
+        if self._key:
+            people, each = self._bare.plan.denominator or 100, columns[0][1]
+            laid = lay_array(people, each, style.px(WIDEST_ICON[people]), self._options.icons)
+            y += set_key(Sheet(painter, style), x, y, width, self._key, self._options.icons, laid) + style.px(10)
         left_over = None if within is None else within - (y - top)
         return y + _picture(self._bare, painter, style, x, y, width, left_over) - top
+
+    def _stacked(self, style: PaperStyle, width: float) -> int:
+        """How many arrays stand one under the other."""
+        columns = self._bare.columns(style, width)
+        return 2 if len(columns) == 2 and columns[0][0] == columns[1][0] else 1
 
     def _own_columns(self, style: PaperStyle, width: float) -> tuple[tuple[float, float], ...]:
         """Left edge and width of both groups' columns; none where one picture holds both or they stand stacked."""
@@ -152,14 +181,17 @@ def _picture(
 def captions(style: PaperStyle, sides: Sequence[PlainSide], width: float) -> list[Caption]:
     """Each group's name, count and other frame, in as many paragraphs for all, so that their lines stand level.
 
-    Count and percentage stand on one line where both groups' do at some size, else the percentages on their own.
+    Count and percentage stand on one line where both groups' do at some size, else the percentages on their own, under
+    counts of a size at which these do, if there is one.
     """
     for part in FIGURE_SIZES:
         figure = _part_of(style.font("figure"), part)
         counts = [_count(style, side, figure) for side in sides]
         if all(on_one_line(count, width) for count in counts):
             return [_caption(style, side, count) for side, count in zip(sides, counts, strict=True)]
-    figure = style.font("figure")
+    alone = [_part_of(style.font("figure"), part) for part in FIGURE_SIZES]
+    whole = (figure for figure in alone if all(on_one_line(_count(style, side, figure)[:1], width) for side in sides))
+    figure = next(whole, alone[0])
     return [_caption(style, side, *([run] for run in _count(style, side, figure))) for side in sides]
 
 

@@ -13,7 +13,7 @@ from fourcount.appraisal.findings import PatientFindings
 from fourcount.record.outcome import Certainty, Outcome
 from fourcount.wording import event_names, names, numbers, of_people, plain, plain_starts, plain_texts, spans
 from fourcount.wording.picture_sentence import WHICH_PEOPLE
-from fourcount.wording.plain_groups import group_phrase, group_title
+from fourcount.wording.plain_groups import bounded, group_phrase, group_title
 from fourcount.wording.plain_risks import PlainRisks
 from fourcount.wording.subject import subject
 
@@ -90,8 +90,8 @@ def plain_words(outcome: Outcome, patient: PatientFindings, risks: PlainRisks, p
     """All words of one outcome that ``why_not`` lets through, of ``people`` people."""
     outcome, turned = subject(outcome), plain.is_turned(outcome)
     column = plain.unwelcome_column(outcome)
-    event = plain.plain_said(outcome, column)
-    other = plain.plain_said(outcome, "left" if column == "right" else "right") or plain_texts.DO_NOT
+    event = bounded(plain.plain_said(outcome, column))
+    other = bounded(plain.plain_said(outcome, "left" if column == "right" else "right") or plain_texts.DO_NOT)
     flips = plain.says_the_other(outcome, event, other)
     change = Change(other, -risks.difference, people) if flips else Change(event, risks.difference, people)
     index = group_phrase(outcome, "index")
@@ -122,7 +122,7 @@ def plain_words(outcome: Outcome, patient: PatientFindings, risks: PlainRisks, p
 def title(outcome: Outcome, patient: PatientFindings, event: str) -> str:
     """What the page is about, and over which time: "Falls in 12 months"."""
     name = event_names.without_unit(names.bare(outcome.name_text)) or plain_texts.HOW_MANY.format(event=event)
-    return f"{name} {span(outcome, patient)}".strip()
+    return f"{bounded(name)} {span(outcome, patient)}".strip()
 
 
 def span(outcome: Outcome, patient: PatientFindings) -> str:
