@@ -48,13 +48,14 @@ class Keeping(QObject):
         super().__init__(parent)
         self._session = session
         self._told: str | None = None
+        self._followed: Path | None = None
         self._watcher = QFileSystemWatcher(self)
         self._settling = QTimer(self)
         self._settling.setSingleShot(True)
         self._settling.setInterval(SETTLING)
         self._settling.timeout.connect(self.look)
         self._watcher.fileChanged.connect(self._on_file_changed)
-        session.changed.connect(self._follow)
+        session.changed.connect(self._on_changed)
 
     @property
     def path(self) -> Path | None:
@@ -109,9 +110,14 @@ class Keeping(QObject):
     def _sentence(self, path: Path, reason: str) -> str:
         return words.NOT_SAVED.format(name=named(path), reason=reason[:1].lower() + reason[1:])
 
-    def _follow(self, *_: object) -> None:
+    def _on_changed(self, *_: object) -> None:
+        """Watch another file where the record has another; a key that is pressed asks no disk."""
+        if self._session.document.path != self._followed:
+            self._follow()
+
+    def _follow(self) -> None:
         """Watch the record's file and no other; one that was replaced is watched anew."""
-        path = self._session.document.path
+        path = self._followed = self._session.document.path
         wanted = {str(path)} if path is not None else set()
         watched = set(self._watcher.files())
         if watched - wanted:
