@@ -189,7 +189,7 @@ def test_a_change_on_disk_is_told_as_it_happens(hands: Hands, answers: Answers, 
     hands.qtbot.waitUntil(lambda: told(hands) == words.CHANGED_ELSEWHERE.format(name="paper.fourcount"))
     assert hands.window.session.record == worked_example()
     hands.window.banner.hide()
-    hands.window.files.look()
+    hands.window.files.keeping.look()
     assert told(hands) == ""
 
 
@@ -197,7 +197,7 @@ def test_a_file_that_is_gone_is_told_and_written_again(hands: Hands, answers: An
     """There is nothing to lose, so saving asks nothing."""
     hands.window.files.open_path(str(paper))
     paper.unlink()
-    hands.window.files.look()
+    hands.window.files.keeping.look()
     assert told(hands) == words.GONE.format(name="paper.fourcount")
     hands.write(hands.window.header.title, "Mine")
     hands.do("save")
@@ -211,7 +211,7 @@ def test_our_own_saves_are_no_change_elsewhere(example: Hands, answers: Answers,
     save_as(example, answers, path)
     example.type("1")
     example.do("save")
-    example.window.files.look()
+    example.window.files.keeping.look()
     assert told(example) == ""
     change(path)
     example.qtbot.waitUntil(lambda: "has been changed" in told(example))

@@ -47,6 +47,7 @@ class FileCommands(QObject):
         self._open = settings.state_folder / OPEN_NAME
         self._settings = settings
         self._left = False
+        self._dropped = ""
         self.open_files = OpenFiles(self._open, self)
         self.recent.chosen.connect(self.open_path)
         self.keeping.changed_elsewhere.connect(self.failed)
@@ -118,6 +119,19 @@ class FileCommands(QObject):
         self.noticed.emit(words.OPENED.format(name=named(wanted)))
         self._settled_in(wanted)
 
+    def take_dropped(self, paths: list[str]) -> None:
+        """Open the file that was dropped, once the drop is over: a question must not hold up where it comes from."""
+        if len(paths) != 1:
+            self.failed.emit(words.ONE_FILE)
+        elif not paths[0]:
+            self.failed.emit(words.NOT_LOCAL)
+        else:
+            self._dropped = paths[0]
+            QTimer.singleShot(0, self._open_dropped)
+
+    def _open_dropped(self) -> None:
+        self.open_path(self._dropped)
+
     def open_beside(self, path: str) -> None:
         """Open a file that the system hands over: here while nothing has begun, else in a window of its own."""
         untouched = self.keeping.path is None and self._session.record == self._session.document.saved
@@ -166,10 +180,6 @@ class FileCommands(QObject):
         self._left = True
         self.set_aside.drop()
         self.open_files.release()
-
-    def look(self) -> None:
-        """The window is in front again: see whether its file has changed meanwhile."""
-        self.keeping.look()
 
     def follow(self) -> None:
         """Hold the file of the record in view, which an undo can change."""

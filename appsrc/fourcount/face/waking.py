@@ -13,7 +13,6 @@ from fourcount.face.collecting import Collecting
 from fourcount.face.commands import Commands
 from fourcount.face.cursor_keeper import CursorKeeper
 from fourcount.face.file_commands import FileCommands
-from fourcount.face.file_drops import FileDrops
 from fourcount.face.outcome_commands import OutcomeCommands
 from fourcount.face.outcomes_bar import OutcomesBar
 from fourcount.face.reading import Reading
@@ -46,7 +45,7 @@ def wake(window: MainWindow, settings: Settings, later: Later) -> None:
     window.view = ViewCommands(window)
     window.files = FileCommands(window, settings)
     window.keeps_aside = _set_aside_switch(menus["file"], actions["handout"], settings.sets_aside())
-    FileDrops(window, window.files)
+    window.setAcceptDrops(True)
     bar = OutcomesBar(window.look, actions["outcome-add"], menus["outcomes"])
     window.header.take_bar(bar)
     QWidget.setTabOrder(bar.plus, window.banner.dismiss)

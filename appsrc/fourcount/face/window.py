@@ -7,12 +7,13 @@ from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer, Signal
 from PySide6.QtGui import QAction, QActionGroup, QCloseEvent, QIcon, QKeyEvent, QPaintEvent, QResizeEvent
-from PySide6.QtWidgets import QApplication, QMainWindow, QVBoxLayout, QWidget
+from PySide6.QtWidgets import QApplication, QVBoxLayout, QWidget
 
 from fourcount.face import actions as commands_table
 from fourcount.face.as_printed import AsPrinted
 from fourcount.face.cautions_strip import CautionsStrip
 from fourcount.face.columns import Page, PageScroll
+from fourcount.face.file_target import FileTarget
 from fourcount.face.for_one_patient import ForOnePatient
 from fourcount.face.header import Banner, Hairline, Header
 from fourcount.face.later import Later
@@ -42,7 +43,7 @@ ROOM_FOR_A_FRAME = QSize(0, 40)
 SMALLEST_SIZE = QSize(480, 360)
 
 
-class MainWindow(QMainWindow):
+class MainWindow(FileTarget):
     """Everything on screen; the record itself lives in the session.
 
     **Signals**
@@ -61,7 +62,6 @@ class MainWindow(QMainWindow):
     drawing: tuple[QActionGroup, QActionGroup]
     files: FileCommands
     keeps_aside: QAction
-    wanted_file = ""
     checking: Checking | None = None
 
     def __init__(self, session: Session, look: Look, settings: Settings, later: Later) -> None:
@@ -166,10 +166,11 @@ class MainWindow(QMainWindow):
         self.drawing[1].triggered.connect(see.take_arrangement)
         among.begun.connect(go.to_first_cell)
         among.told.connect(self._on_told)
+        self.dropped.connect(self.files.take_dropped)
+        self.came_forward.connect(self.files.keeping.look)
         self.keeps_aside.triggered.connect(self.files.switch_set_aside)
         self.session.changed.connect(self.files.follow)
-        self.files.noticed.connect(self.header.tell)
-        self.files.noticed.connect(self.banner.hide)
+        self.files.noticed.connect(do.noticed)
         self.files.failed.connect(self.banner.tell)
         do.noticed.connect(self.header.tell)
         do.noticed.connect(self.banner.hide)
