@@ -32,11 +32,14 @@ def ask_losing(parent: QWidget, name: str) -> Losing:
     """Ask whether to save before something unsaved goes; Enter saves and Escape stays."""
     box = _box(parent, words.LOSING_TITLE, words.LOSING_QUESTION.format(name=name), words.LOSING_DETAIL)
     buttons = QMessageBox.StandardButton
-    box.setStandardButtons(buttons.Save | buttons.Discard | buttons.Cancel)
-    box.setDefaultButton(buttons.Save)
-    box.setEscapeButton(buttons.Cancel)
-    answer = box.exec()
-    return "save" if answer == buttons.Save else "discard" if answer == buttons.Discard else "cancel"
+    save, discard = box.addButton(buttons.Save), box.addButton(buttons.Discard)
+    cancel = box.addButton(buttons.Cancel)
+    box.setDefaultButton(save)
+    box.setEscapeButton(cancel)
+    box.exec()
+    clicked = box.clickedButton()
+    box.deleteLater()
+    return "save" if clicked is save else "discard" if clicked is discard else "cancel"
 
 
 def ask_over(parent: QWidget, name: str) -> Over:
@@ -49,6 +52,7 @@ def ask_over(parent: QWidget, name: str) -> Over:
     box.setEscapeButton(cancel)
     box.exec()
     clicked = box.clickedButton()
+    box.deleteLater()
     return "over" if clicked is over else "other" if clicked is other else "cancel"
 
 
@@ -60,7 +64,9 @@ def ask_replace(parent: QWidget, name: str) -> bool:
     box.setDefaultButton(cancel)
     box.setEscapeButton(cancel)
     box.exec()
-    return box.clickedButton() is over
+    agreed = box.clickedButton() is over
+    box.deleteLater()
+    return agreed
 
 
 def ask_recover(look: Look, parent: QWidget, offer: Offer) -> str:
@@ -77,7 +83,6 @@ def ask_recover(look: Look, parent: QWidget, offer: Offer) -> str:
 def _box(parent: QWidget, title: str, question: str, detail: str) -> QMessageBox:
     """A question in plain text, whatever a file is called."""
     box = QMessageBox(parent)
-    box.setAttribute(Qt.WidgetAttribute.WA_DeleteOnClose, on=False)
     box.setTextFormat(Qt.TextFormat.PlainText)
     box.setWindowTitle(title)
     box.setText(question)
