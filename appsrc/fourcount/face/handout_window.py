@@ -104,8 +104,10 @@ class HandoutWindow(QDialog):
         self._panel = QWidget()
         self._column = QVBoxLayout(self._panel)
         self._column.addWidget(self.heading)
-        self._list = QVBoxLayout()
-        self._column.addLayout(self._list)
+        boxes = QWidget()  # of their own, so that they are read where they stand
+        self._list = QVBoxLayout(boxes)
+        self._list.setContentsMargins(0, 0, 0, 0)
+        self._column.addWidget(boxes)
         self._column.addWidget(self.notes)
         self._column.addWidget(self.range)
         self._column.addWidget(self.paper)
