@@ -104,10 +104,8 @@ class HandoutWindow(QDialog):
         self._panel = QWidget()
         self._column = QVBoxLayout(self._panel)
         self._column.addWidget(self.heading)
-        boxes = QWidget()  # of their own, so that they are read where they stand
-        self._list = QVBoxLayout(boxes)
-        self._list.setContentsMargins(0, 0, 0, 0)
-        self._column.addWidget(boxes)
+        self._list = QVBoxLayout()
+        self._column.addLayout(self._list)
         self._column.addWidget(self.notes)
         self._column.addWidget(self.range)
         self._column.addWidget(self.paper)
@@ -165,6 +163,8 @@ class HandoutWindow(QDialog):
             tick.clicked.connect(self._on_ticked)
             self._list.addWidget(tick)
             self._ticks.append(tick)
+        for below in (self.notes, self.range, self.paper, self.notice, self.save, self.print):
+            below.raise_()  # what was made last is read last
         order = [*self._ticks, self.range, self.paper, self.save, self.print, self.preview]
         for before, after in pairwise(order):
             self.setTabOrder(before, after)
