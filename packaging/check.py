@@ -2,9 +2,9 @@
 
     python3 packaging/check.py
 
-Lint, format, types, the tests without a screen, then the tests that need a real window on a screen in
-memory. The tests of the window run beside all others, on another core. A step that fails does not stop the next one; the
-exit status says whether all of them passed.
+Lint, format, types, the tests without a screen (those of the window beside all others, on another core), then
+the tests that need a real window on a screen in memory. A step that fails does not stop the next one; the exit
+status says whether all of them passed.
 """
 
 from __future__ import annotations
