@@ -143,7 +143,7 @@ def test_the_whole_page_is_told_to_a_screen_reader(opened: Opened) -> None:
         "12 in 100",
         "6 fewer of these 100",
         "We cannot say which people.",
-        "How sure the evidence is: not rated.",
+        "How sure the evidence is: not rated, so nobody has judged it here.",
     ):
         assert part in description
     assert all(button.accessibleName() for button in screen.findChildren(QAbstractButton) if button.isVisible())
