@@ -12,8 +12,9 @@ from hypothesis import strategies as st
 from drawn_forms import outcomes
 from fourcount.appraisal.appraise import appraise
 from fourcount.appraisal.curve import curve, highest_start
-from fourcount.appraisal.findings import Carriable, Figure, Gap, Interval, OutcomeFindings
+from fourcount.appraisal.findings import Carriable, Figure, Gap, Interval, OutcomeFindings, PatientFindings
 from fourcount.appraisal.findings.curve import Curve, CurveLine, CurvePoint
+from fourcount.record.outcome import Outcome, Pairs, Patient
 from fourcount.record.paper import Choices
 
 
@@ -50,6 +51,27 @@ def test_an_odds_ratio_is_the_risk_ratio_that_was_published(appraised: Callable[
     assert [point.value, point.low, point.high] == pytest.approx([2.5 / 1.75, 1.5 / 1.25, 4 / 2.5])
     assert at(ratio, 0.0).value == 2.5
     assert at(ratio, 1.0).value == 1.0
+
+
+def test_a_patient_of_the_study_stands_at_the_studys_point() -> None:
+    """Carried by an odds ratio of the pairs that differ, which leads elsewhere, the study's own risk keeps its own."""
+    table = Pairs(first_left_text="15", first_right_text="85", second_left_text="5", second_right_text="95")
+    outcome = Outcome(table=table, design="paired", patient=Patient(effect="odds_ratio"))
+    findings = appraise(outcome, Choices())
+    assert isinstance(findings.patient, PatientFindings)
+    assert findings.patient.range_from == "table"
+    (mark,) = curve(findings).marks
+    assert (mark.without, mark.with_) == (0.1, findings.patient.with_.estimate) == (0.1, 0.5)
+    assert not isinstance(mark.low, Gap)
+    assert not isinstance(mark.high, Gap)
+    assert mark.low < 0.5 < mark.high
+
+
+def test_an_effect_without_a_line_is_no_other_one(appraised: Callable[..., OutcomeFindings]) -> None:
+    """A risk ratio without end has no line, and none of the others is taken for the one that is carried."""
+    drawn = curve(appraised(55, 4, 0, 9))
+    assert "risk_ratio" not in lines(drawn)
+    assert drawn.carried == -1
 
 
 def test_risk_with_and_risk_ratio_are_two_views_of_one(appraised: Callable[..., OutcomeFindings]) -> None:

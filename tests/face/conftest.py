@@ -177,8 +177,7 @@ def open_window(qtbot: QtBot, folder: Path, monkeypatch: pytest.MonkeyPatch) -> 
     windows: list[MainWindow] = []  # a window that nobody holds is collected, and all that it owns with it
 
     def make(record: Record | None = None) -> MainWindow:
-        gc.collect()  # a dead window that is collected while the next one is made takes its slots along
-        gc.disable()
+        gc.disable()  # a dead window that is collected while this one is made takes its slots along
         workers.append(Later())
         window = make_window(folder, record, workers[-1])
         windows.append(window)

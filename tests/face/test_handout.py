@@ -141,6 +141,16 @@ def test_the_preview_follows_the_text_size(opened: Opened, zooms: tuple[float, f
         assert handout.preview.width() == max(room, 160)
 
 
+@pytest.mark.parametrize(("width", "beside"), [(980, True), (700, True), (600, False), (480, False)])
+def test_a_narrow_window_has_the_page_above_its_boxes(opened: Opened, width: int, beside: bool) -> None:
+    """The page is never narrower than it can be read; the boxes then stand below it, and can be scrolled to."""
+    _, handout = opened()
+    handout.resize(width, 760)
+    assert handout.preview.width() >= min(320, width - 40)
+    assert (handout._side.y() == handout._scroll.y()) == beside
+    assert handout._side.height() <= handout.height() * (1 if beside else 0.5)
+
+
 def test_it_is_refused_where_no_outcome_is_ready(open_window: Callable[..., MainWindow]) -> None:
     """The window says what is missing from the outcome in view."""
     window = open_window(Record(outcomes=(UNNAMED, Outcome())))

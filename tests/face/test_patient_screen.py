@@ -143,7 +143,7 @@ def test_the_whole_page_is_told_to_a_screen_reader(opened: Opened) -> None:
         "12 in 100",
         "6 fewer of these 100",
         "We cannot say which people.",
-        "How sure the evidence is: not rated.",
+        "How sure the evidence is: not rated, so nobody has judged it here.",
     ):
         assert part in description
     assert all(button.accessibleName() for button in screen.findChildren(QAbstractButton) if button.isVisible())
@@ -311,3 +311,20 @@ def test_a_keystroke_looks_at_what_changed_alone(opened: Opened, monkeypatch: py
     window.session.edit_text("name_text", "Falls")
     assert asked == ["Falls"]
     assert title(screen) == "Falls in 12 months"
+
+
+def test_a_page_that_stays_keeps_its_place(opened: Opened) -> None:
+    """What changes elsewhere in the record leaves a page where it was; another outcome begins at its top."""
+    window, screen = opened()
+    window.look.set_zoom(2.0)
+    screen.showNormal()
+    screen.resize(900, 500)
+    QApplication.sendPostedEvents()
+    press(screen, "Down")
+    place = screen._scroll.verticalScrollBar().value()
+    assert place > 0
+    window.session.edit_text("title_text", "Another title")
+    window.session.edit_text("second_label_text", "Care as usual")
+    assert screen._scroll.verticalScrollBar().value() == place
+    press(screen, "Right")
+    assert screen._scroll.verticalScrollBar().value() == 0

@@ -64,15 +64,15 @@ def test_the_patient_view(several: MainWindow, qtbot: QtBot) -> None:
 
 
 def test_the_window_of_the_handout(several: MainWindow, qtbot: QtBot) -> None:
-    """Each outcome is a box to tick, the page one object that says all that will be printed."""
+    """Each outcome is a box to tick and the range the last one, the page one object that says all that is printed."""
     opened = open_handout(several)
     assert opened is not None
     qtbot.waitUntil(opened.isActiveWindow)
     assert faults(opened) == []
     ticks = [one.name for one in tree(opened) if one.role == Role.CheckBox]
-    assert ticks == ["Falls", "Bleeding", "Healing"]
+    assert ticks == ["Falls", "Bleeding", "Healing", "Show the range"]
     page = one_of(tree(opened), "Preview")
-    assert all(f"{name} in" in page.description for name in ticks)
+    assert all(f"{name} in" in page.description for name in ticks[:3])
     assert unseen_focus(reading_order(opened)) == []
     opened.close()
 

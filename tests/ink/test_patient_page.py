@@ -119,7 +119,7 @@ def test_what_makes_a_difference_doubtful_cannot_be_missed() -> None:
     style = page.style(1280, 740)
     runs = {run.text: run for paragraph, _ in page._below(style, 1200) for run in paragraph}
     difference, *others = runs.values()
-    doubts = [run for run in others if "leaves open" in run.text]
+    doubts = [run for run in others if "leaves that open" in run.text]
     assert [(run.font, run.colour) for run in doubts] == [(difference.font, difference.colour)]
     explained = next(run for run in others if run.text.startswith("Other things"))
     assert explained.colour == PAPER.ink

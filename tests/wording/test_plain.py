@@ -145,6 +145,18 @@ def test_the_relative_figure_names_both_absolute_ones(say: Callable[..., PlainWo
     assert relative not in say(AT_TWELVE).told()
 
 
+@pytest.mark.parametrize(
+    ("outcome", "avoided"), [(TRIAL, "spared, on balance"), (CASE_CONTROL, "fewer here, on balance")]
+)
+def test_the_key_claims_no_cause_that_the_page_doubts(
+    outcome: Outcome, avoided: str, say: Callable[..., PlainWords]
+) -> None:
+    """Only where chance made the groups alike is anybody said to be spared."""
+    words = say(outcome)
+    assert words.avoided == avoided
+    assert bool(words.doubt) == (avoided != "spared, on balance")
+
+
 @pytest.mark.parametrize("certainty", CERTAINTIES)
 @pytest.mark.parametrize("outcome", [TRIAL, HARM], ids=["fewer", "more"])
 def test_certainty_is_said_as_it_was_rated(certainty: str, outcome: Outcome, say: Callable[..., PlainWords]) -> None:
@@ -158,7 +170,7 @@ def test_certainty_is_said_as_it_was_rated(certainty: str, outcome: Outcome, say
 def test_no_difference_is_left_open_where_the_interval_holds_it(say: Callable[..., PlainWords]) -> None:
     """An interval through no effect is said right behind the difference; one beside it is not."""
     words = say(SMALL, 1_000)
-    assert f"{words.summary} The study leaves open that there is no difference." in words.told()
+    assert f"{words.summary} There may be no difference: the study leaves that open." in words.told()
     assert say(TRIAL).open_ == ""
 
 

@@ -66,3 +66,10 @@ def test_a_start_too_small_for_the_picture_is_told_of_more_people(say: Callable[
     """0.2% over the study's time is 2 in 1,000, whatever the picture over a longer time shows."""
     words = say(replace(AT_TWELVE, patient=Patient(starting_risk_text="0.2%", other_span_text="20 years")))
     assert words.lead == "These people start at a risk of 2 in 1,000 over 12 months."
+
+
+def test_a_start_over_the_studys_time_has_its_own_number_of_people(say: Callable[..., PlainWords]) -> None:
+    """60% is 60 in 100 also where the picture over a longer time shows 1,000."""
+    words = say(replace(WELCOME, patient=Patient(starting_risk_text="60%", other_span_text="1 year")), 1_000)
+    assert words.lead == "These people start at 60 in 100 who heal over 12 weeks."
+    assert words.without.number == "19 in 1,000"

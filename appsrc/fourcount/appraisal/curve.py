@@ -96,13 +96,13 @@ def _ends(one: Carriable, effect: float) -> tuple[float, float]:
 
 
 def _carried(drawn: list[Carriable], patient: PatientFindings | Gap) -> int:
-    """The place of the effect that the patient is told."""
+    """The place of the effect that the patient is told; -1 where that one has no line."""
     if isinstance(patient, Gap):
-        return 0
+        return -1
     told = (patient.effect, patient.measure, patient.adjusted)
     exact = (place for place, one in enumerate(drawn) if (one.effect, one.measure, one.adjusted) == told)
     like = (place for place, one in enumerate(drawn) if (one.effect, one.adjusted) == (told[0], told[2]))
-    return next(exact, next(like, 0))
+    return next(exact, next(like, -1))
 
 
 def _marks(findings: OutcomeFindings) -> tuple[CurveMark, ...]:
@@ -111,7 +111,7 @@ def _marks(findings: OutcomeFindings) -> tuple[CurveMark, ...]:
     usual = findings.patient
     if isinstance(usual, Gap):
         return (study,) if study else ()
-    told = [_patient(one) for one in (usual.low, usual, usual.high) if isinstance(one, PatientFindings)]
+    told = [_patient(one, study) for one in (usual.low, usual, usual.high) if isinstance(one, PatientFindings)]
     if study is None:
         return tuple(told)
     same = [mark for mark in told if _same(mark, study)]
@@ -147,10 +147,15 @@ def _study(findings: OutcomeFindings) -> CurveMark | None:
     return None
 
 
-def _patient(patient: PatientFindings) -> CurveMark:
-    """Where the carried effect takes the starting risk within the study's own time span."""
+def _patient(patient: PatientFindings, study: CurveMark | None) -> CurveMark:
+    """Where the carried effect takes the starting risk within the study's own time span.
+
+    A patient of the study's own risk is told the study's risks themselves, whatever effect is chosen.
+    """
     estimate, interval = patient.carried.estimate, patient.with_.interval
     with_ = estimate if isinstance(estimate, Gap) else risk_with(patient.effect, estimate, patient.baseline)
+    if patient.range_from == "table" and study is not None:
+        with_ = study.with_
     if patient.other_span is not None or isinstance(interval, Gap):
         low: float | Gap = Gap("bare-starting-risk")
         high: float | Gap = Gap("bare-starting-risk")

@@ -8,7 +8,7 @@ from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QSize, Qt, QTimer
 from PySide6.QtGui import QAction, QKeySequence, QResizeEvent
-from PySide6.QtWidgets import QDialog, QHBoxLayout, QScrollArea, QVBoxLayout, QWidget
+from PySide6.QtWidgets import QBoxLayout, QDialog, QScrollArea, QVBoxLayout, QWidget
 
 from fourcount.face import handout_dialogs
 from fourcount.face.buttons import Button
@@ -33,6 +33,9 @@ PAUSE = 250
 """Milliseconds after the last change of the record before the page is made anew."""
 
 PANEL = 300
+LEAST_PAGE = 340
+"""Narrower, in pixels, a page beside the panel could not be read."""
+
 ROOM_FOR_A_FRAME = QSize(0, 40)
 
 
@@ -125,7 +128,7 @@ class HandoutWindow(QDialog):
         side.setVerticalScrollBar(ScrollBar(self._look))
         side.setHorizontalScrollBarPolicy(Qt.ScrollBarPolicy.ScrollBarAlwaysOff)
         self._side = side
-        self._row = row = QHBoxLayout(self)
+        self._row = row = QBoxLayout(QBoxLayout.Direction.LeftToRight, self)
         row.setContentsMargins(0, 0, 0, 0)
         row.addWidget(self._scroll, 1)
         row.addWidget(side)
@@ -163,6 +166,8 @@ class HandoutWindow(QDialog):
             tick.clicked.connect(self._on_ticked)
             self._list.addWidget(tick)
             self._ticks.append(tick)
+        for below in (self.notes, self.range, self.paper, self.notice, self.save, self.print):
+            below.raise_()  # what was made last is read last
         order = [*self._ticks, self.range, self.paper, self.save, self.print, self.preview]
         for before, after in pairwise(order):
             self.setTabOrder(before, after)
@@ -213,15 +218,23 @@ class HandoutWindow(QDialog):
         self._fit()
 
     def _fit(self) -> None:
+        """The panel stands beside the page where that leaves the page a width to be read at, else below it."""
+        beside = self.width() >= self._look.px(PANEL) + LEAST_PAGE
+        ways, most = QBoxLayout.Direction, 16_777_215  # Qt's own for no limit
+        self._row.setDirection(ways.LeftToRight if beside else ways.TopToBottom)
+        self._side.setMinimumWidth(self._look.px(PANEL) if beside else 0)
+        self._side.setMaximumWidth(self._look.px(PANEL) if beside else most)
+        tall = min(self._panel.sizeHint().height(), self.height() // 2)
+        self._side.setMinimumHeight(0 if beside else tall)
+        self._side.setMaximumHeight(most if beside else tall)
+        self._row.activate()
         bar = self._scroll.verticalScrollBar().sizeHint().width()
         self.preview.fit(max(self._scroll.width() - bar, 160))
 
     def _on_look_changed(self) -> None:
         px = self._look.px
-        self._side.setFixedWidth(px(PANEL))
         self._column.setContentsMargins(px(20), px(20), px(20), px(20))
         self._column.setSpacing(px(12))
         self._list.setSpacing(px(4))
         self.setPalette(self._look.qt_palette())
-        self._row.activate()
         self._fit()

@@ -17,6 +17,7 @@ class Canvas(QWidget):
     def __init__(self, look: OnWhite) -> None:
         super().__init__()
         self._look = look
+        self._shown: Shown | None = None
         self._page: PatientPage | None = None
         self._laid: Fit | None = None
         self._room = QSize()
@@ -25,7 +26,10 @@ class Canvas(QWidget):
         look.changed.connect(self._fit)
 
     def show_page(self, it: Shown) -> None:
-        """Show another outcome."""
+        """Show another outcome, or the same one as it is now."""
+        if it == self._shown:
+            return
+        self._shown = it
         self._page = PatientPage(it)
         self.setAccessibleName(it.words.title)
         self.setAccessibleDescription(it.words.told(ranged=it.options.uncertainty))

@@ -170,7 +170,6 @@ class PatientScreen(QWidget):
             return
         self._outcome = self._session.record.outcomes[self.outcome]
         self.canvas.show_page(it)
-        self._scroll.verticalScrollBar().setValue(0)
         number, count = self._place + 1, len(self._pages)
         several = count > 1
         self.place.show_words(plain_texts.PLACE.format(number=number, all=count) if several else "")
@@ -187,6 +186,7 @@ class PatientScreen(QWidget):
         if place != self._place:
             self._place = place
             self._show()
+            self._scroll.verticalScrollBar().setValue(0)
 
     # Qt's own
 

@@ -14,6 +14,10 @@ from PySide6.QtGui import QColor, QFont, QPainter, QTextCharFormat, QTextLayout,
 
 from fourcount.ink.typeset import bounded
 
+MOST_HEIGHTS = 4_000
+_heights: dict[tuple[object, ...], float] = {}
+"""Heights once measured: a page is tried at many sizes, and most of its words are those of the page before."""
+
 
 class Run(NamedTuple):
     """A piece of a paragraph in one font and one colour."""
@@ -25,8 +29,13 @@ class Run(NamedTuple):
 
 def paragraph_height(runs: Sequence[Run], width: float) -> float:
     """Height of a paragraph that wraps at ``width``; 0 for no text."""
-    layout = _laid(runs, width)
-    return layout.boundingRect().height() if layout else 0.0
+    key = (width, *((run.text, run.font.key()) for run in runs))
+    if key not in _heights:
+        layout = _laid(runs, width)
+        if len(_heights) >= MOST_HEIGHTS:
+            _heights.clear()
+        _heights[key] = layout.boundingRect().height() if layout else 0.0
+    return _heights[key]
 
 
 def draw_paragraph(painter: QPainter, x: float, y: float, width: float, runs: Sequence[Run]) -> float:

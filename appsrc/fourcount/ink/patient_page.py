@@ -30,7 +30,9 @@ WORTH_A_LINE = 0.2
 BELOW_HEADLINE = 14
 """More space than below other sentences, where the difference stands above the pictures."""
 
-STEPS = 12
+STEPS, STEP = 12, 0.05
+"""How many sizes of text are tried, and by which part of the largest each is smaller."""
+
 MARGIN = 45
 
 Spaced = tuple[Sequence[Run], float]
@@ -85,17 +87,24 @@ class PatientPage:
         """
         least = LEAST_AT_ONE * zoom
         wanted = min(AT_THAT_SIZE * min(width / DESIGNED_FOR[0], height / DESIGNED_FOR[1]) * max(zoom, 1.0), LARGEST)
+        scales = dict.fromkeys(max(wanted * (1 - step * STEP), least) for step in range(STEPS))
+        styles = [PaperStyle(scale, SCREEN_SIZES) for scale in scales]
+        none_fits = zoom > 1 and not self._fits(styles[-1], width, height)  # mostly so at large text
         first = None
-        for step in range(STEPS):
-            style = PaperStyle(max(wanted * (1 - step * 0.05), least), SCREEN_SIZES)
-            wide = self._wide(style, width)
-            if self._text_height(style, wide) + self._picture.good_height(style, wide) <= height:
-                if not self._picture.counts_wrap(style, wide):
+        for at, style in enumerate(() if none_fits else styles):
+            if self._fits(style, width, height):
+                if not self._picture.counts_wrap(style, self._wide(style, width)):
                     return style
                 first = first or style
-            if first and step * 0.05 >= WORTH_A_LINE:
+            if first and at * STEP >= WORTH_A_LINE:
                 break
         return first or PaperStyle(least, SCREEN_SIZES)
+
+    def _fits(self, style: PaperStyle, width: float, height: float) -> bool:
+        """Whether words and people of a good size have room."""
+        wide = self._wide(style, width)
+        left = height - self._text_height(style, wide)
+        return left > 0 and self._picture.good_height(style, wide) <= left
 
     def least_height(self, style: PaperStyle, width: float) -> float:
         """Height below which nothing would be left of the picture."""

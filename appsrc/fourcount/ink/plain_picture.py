@@ -232,8 +232,8 @@ def picture_words(it: Shown) -> PictureWords:
     entries = (
         KeyEntry("affected", pattern.format(words=words.event)),
         KeyEntry("others", pattern.format(words=words.other)),
-        KeyEntry("added", plain_texts.ADDED),
-        KeyEntry("avoided", plain_texts.AVOIDED),
+        KeyEntry("added", words.added),
+        KeyEntry("avoided", words.avoided),
         KeyEntry("uncertain", OPEN),
     )
     low, _, high = axis_words("risk", bar_pair(plan).top)

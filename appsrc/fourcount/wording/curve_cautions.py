@@ -38,4 +38,4 @@ def curve_cautions(findings: OutcomeFindings, curve: Curve, view: View) -> tuple
 
 def _of_the_carried(curve: Curve, view: View) -> bool:
     """Whether the odds ratio that is shown as a risk ratio is the effect that the patient is told."""
-    return curve.ratios[view.place].effect is curve.lines[curve.carried].effect
+    return curve.carried >= 0 and curve.ratios[view.place].effect is curve.lines[curve.carried].effect

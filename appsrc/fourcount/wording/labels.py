@@ -223,7 +223,9 @@ KEYS_MORE = (
     ("Arrow keys, Enter", "from count to count; Enter at the end of strata adds a row"),
     ("{paste} in the first column", "a table or a sentence fills the table, anything else its field"),
     ("Enter or Space on a measure", "show or hide its working"),
-    ("Escape", "leave what was pasted, close the working or a help window"),
+    ("Escape", "leave what was pasted, close the working, a help window or the patient’s page"),
+    ("Left, Right on the patient’s page", "the outcome before, the next one; Home and End: the first and the last"),
+    ("Up, Down on the patient’s page", "move a page that is higher than the screen"),
 )
 
 ABOUT = (

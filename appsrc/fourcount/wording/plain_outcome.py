@@ -33,7 +33,8 @@ class PlainWords(NamedTuple):
 
     ``who`` goes behind the title where other pages beside this one show other people, in place of ``lead``.
     ``turned`` says which side is drawn where ``summary`` speaks of the other. ``open_``, ``rounded`` and ``doubt``
-    belong to ``summary``. ``certainty`` is always there.
+    belong to ``summary``. ``avoided`` and ``added`` stand in the key and claim no cause where there is a ``doubt``.
+    ``certainty`` is always there.
     """
 
     title: str
@@ -44,6 +45,8 @@ class PlainWords(NamedTuple):
     with_: PlainSide
     event: str
     other: str
+    avoided: str
+    added: str
     summary: str
     open_: str
     rounded: str
@@ -97,6 +100,7 @@ def plain_words(outcome: Outcome, patient: PatientFindings, risks: PlainRisks, p
     index = group_phrase(outcome, "index")
     drawn = plain_texts.DRAWN.format(event=event) if flips else ""
     start = plain_starts.Told(turned, "" if plain.is_negative(other) else plain_texts.DRAWN.format(event=other))
+    avoided, added = plain_texts.CHANGED_HERE if outcome.design in plain_texts.NOT_ALIKE else plain_texts.CHANGED
     return PlainWords(
         title=title(outcome, patient, event),
         who=plain_starts.who(patient, start, people),
@@ -106,6 +110,8 @@ def plain_words(outcome: Outcome, patient: PatientFindings, risks: PlainRisks, p
         with_=_side(outcome, "index", risks.with_, people, event, other),
         event=event,
         other=other,
+        avoided=avoided,
+        added=added,
         summary=_summary(change, index),
         open_=_open(risks),
         rounded="" if _adds_up(risks, people) else plain_texts.ROUNDED,

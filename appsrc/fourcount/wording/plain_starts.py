@@ -9,6 +9,7 @@ from fourcount.wording import numbers, of_people, plain_texts, spans, starts
 from fourcount.wording.plain_risks import PlainRisks, people_in_text, plain_risks
 
 MOST_PEOPLE = 1_000_000_000
+ROUND = (100, 1_000, 10_000)
 
 
 class Told(NamedTuple):
@@ -77,9 +78,11 @@ def _start(patient: PatientFindings, told: Told, people: int) -> str:
     Nobody starts at a risk that is computed over another time.
     """
     risk = 1 - patient.baseline if told.turned and not told.as_typed else patient.baseline
+    apart = patient.other_span is not None and patient.study_span is not None
+    if apart:  # the picture's number of people suits the other time
+        people = next((of for of in ROUND if _is_whole(risk * of)), people)
     while of_people.hidden(risk, people) and people < MOST_PEOPLE:
         people *= 10
-    apart = patient.other_span is not None and patient.study_span is not None
     over = plain_texts.OVER.format(span=spans.duration(patient.study_span)) if apart and patient.study_span else ""
     return plain_texts.START.format(
         count=of_people.affected(risk, people),
@@ -87,6 +90,10 @@ def _start(patient: PatientFindings, told: Told, people: int) -> str:
         who=told.who if told.as_typed else "",
         over=over,
     )
+
+
+def _is_whole(number: float) -> bool:
+    return abs(number - round(number)) < 1e-9 * max(number, 1)
 
 
 def _apart_at(risks: PlainRisks, people: int) -> bool:

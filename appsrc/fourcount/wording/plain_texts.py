@@ -31,10 +31,12 @@ EACH_PICTURE = "Each picture shows {people} people."
 EITHER_WAY = "{words}, with both"
 """What the key says where one array shows both groups."""
 
-AVOIDED, ADDED = "spared, on balance", "added, on balance"
-"""The key of figures that make the difference, without a number: fewer are drawn where the range takes their place."""
+CHANGED = ("spared, on balance", "added, on balance")
+CHANGED_HERE = ("fewer here, on balance", "more here, on balance")
+"""The key of figures that make the difference, avoided and added, without a number: fewer are drawn where the range
+takes their place. The second pair is for studies that show no cause."""
 
-OPEN = "The study leaves open that there is no difference."
+OPEN = "There may be no difference: the study leaves that open."
 OPEN_EITHER_WAY = "The study leaves open a difference either way."
 OPEN_ONE_WAY = "The study leaves open that there is a difference."
 RANGE = "{index}, it could be from {low} to {high} in {people}{drawn}."
@@ -48,7 +50,7 @@ OTHER_START = "For people who start at {start}, it is {after} in {people} {index
 OTHER_START_OVER = "For people who start at {start}, it is {before} in {people} {reference} and {after} {index}."
 
 CERTAINTY_NAMES: dict[Certainty, str] = {
-    "": "How sure the evidence is: not rated.",
+    "": "How sure the evidence is: not rated, so nobody has judged it here.",
     "high": "How sure the evidence is: high, as rated by your clinician.",
     "moderate": "How sure the evidence is: moderate, as rated by your clinician.",
     "low": "How sure the evidence is: low, as rated by your clinician.",

@@ -50,8 +50,8 @@ class Curve(msgspec.Struct, frozen=True, kw_only=True):
     """Every effect that can be carried, as the risk with across starting risks, and odds ratios as risk ratios.
 
     ``lines`` stand in the order of ``carriable``, ``ratios`` are those of the odds ratios. ``left_out`` are the effects
-    that give no line. ``carried`` is the place in ``lines`` of the effect that the patient is told, 0 where there is
-    none. ``reach`` is the highest starting risk shown.
+    that give no line. ``carried`` is the place in ``lines`` of the effect that the patient is told, -1 where that
+    one has no line. ``reach`` is the highest starting risk shown.
     """
 
     lines: tuple[CurveLine, ...]
