@@ -15,6 +15,7 @@ from fourcount.face.later import Later
 from fourcount.record.outcome import EventsAndOthers, Outcome
 from fourcount.record.paper import Choices
 from fourcount.wording.lines import FOLLOWS
+from heard import Heard
 
 if TYPE_CHECKING:
     from conftest import Hands
@@ -118,8 +119,9 @@ def test_an_answer_for_a_table_that_is_gone_is_not_shown(waiting: Hands, gate: G
     """Figures that arrive after the counts were cleared stay away."""
     assert gate.reached.wait(20)
     waiting.do("clear")
-    with waiting.qtbot.waitSignal(waiting.window._later.arrived):
-        gate.open.set()
+    heard = Heard(waiting.window._later.arrived, waiting.window)
+    gate.open.set()
+    waiting.qtbot.waitUntil(lambda: bool(heard.values))
     assert waiting.rows == {}
     assert waiting.sentence == "Type the four counts of the table."
 
@@ -128,8 +130,9 @@ def test_an_answer_for_another_family_is_not_shown(waiting: Hands, gate: Gate) -
     """Whoever went back to the score family sees its figures, whatever arrives."""
     assert gate.reached.wait(20)
     waiting.choose(waiting.window.says.family, "score")
-    with waiting.qtbot.waitSignal(waiting.window._later.arrived):
-        gate.open.set()
+    heard = Heard(waiting.window._later.arrived, waiting.window)
+    gate.open.set()
+    waiting.qtbot.waitUntil(lambda: bool(heard.values))
     assert waiting.rows["risk_reference"] == "Risk, reference group: 17.1%, 13.8 to 21.1%"
 
 
@@ -181,13 +184,14 @@ def test_of_several_questions_only_the_newest_is_computed(qtbot: QtBot, gate: Ga
 def test_a_worker_that_is_done_starts_again(qtbot: QtBot, gate: Gate) -> None:
     """Question after question is answered, each with the very objects it was asked with."""
     later = Later()
+    heard = Heard(later.arrived, later)
     gate.open.set()
-    for first in ("1", "2"):
+    for number, first in enumerate(("1", "2"), start=1):
         asked = table(first)
-        with qtbot.waitSignal(later.arrived) as answer:
-            later.ask(asked, EXACT)
-        assert answer.args[0] is asked
-        assert answer.args[1] is EXACT
+        later.ask(asked, EXACT)
+        qtbot.waitUntil(lambda n=number: len(heard.values) == n)
+        assert heard.values[-1][0] is asked
+        assert heard.values[-1][1] is EXACT
 
 
 def test_after_closing_nothing_arrives(qtbot: QtBot, gate: Gate) -> None:
