@@ -178,6 +178,8 @@ MISTAKES = [
     ["answer", *TRIAL, "--jso"],
     ["answer", *TRIAL, "--bogus"],
     ["answer", *TRIAL, "-x"],
+    ["answer", "paper.fourcount"],
+    ["answer", "paper.fourcount", "--level", "90"],
     ["answer", ""],
     ["answer", "38"],
     ["answer", *TRIAL, "--baseline", "120%"],
@@ -188,6 +190,7 @@ MISTAKES = [
     ["answer", *TRIAL, "--effect", "hr"],
     ["answer", *TRIAL, "--margin", "1.25"],
     ["answer", *TRIAL, "--margin", "RR 1.25", "--matters", "RD 5%"],
+    ["handout", "paper.fourcount"],
     ["--bogus"],
     ["answer\nanswer"],
     [""],
@@ -228,8 +231,8 @@ def test_no_words_open_the_window(monkeypatch: pytest.MonkeyPatch) -> None:
 
     class Application:
         @staticmethod
-        def run() -> int:
-            return 7
+        def run(path: str) -> int:
+            return 7 if path == "" else 8
 
     monkeypatch.setitem(sys.modules, "fourcount.face.application", Application)  # type: ignore[arg-type]
     monkeypatch.setenv("QT_QPA_PLATFORM", "offscreen")
