@@ -2,13 +2,11 @@
 
 from __future__ import annotations
 
-import threading
 from collections.abc import Callable
-from contextlib import suppress
 
-from PySide6.QtCore import QObject, Qt, Signal, SignalInstance
+from PySide6.QtCore import QObject, Qt, Signal
 
-from fourcount.face.later import Later
+from fourcount.face.later import Later, Newest
 
 Draw = Callable[[], bytes]
 
@@ -26,50 +24,20 @@ class CurveWorker(QObject):
 
     def __init__(self, later: Later, parent: QObject | None = None) -> None:
         super().__init__(parent)
-        self._later = later
-        self._lock = threading.Lock()
-        self._wanted: tuple[object, Draw] | None = None
-        self._busy = False
-        self._closed = False
+        self._drawings = Newest(later.start, _drawn, self.drawn, self.failed)
         self.failed.connect(self._on_failed, Qt.ConnectionType.QueuedConnection)
 
     def ask(self, key: object, draw: Draw) -> None:
         """Draw something, and say so by ``key``."""
-        with self._lock:
-            if self._closed:
-                return
-            self._wanted = (key, draw)
-            if self._busy:
-                return
-            self._busy = True
-        self._later.start(self._work)
+        self._drawings.ask(key, draw)
 
     def close(self) -> None:
         """Answer nothing any more."""
-        with self._lock:
-            self._closed = True
-            self._wanted = None
-
-    def _work(self) -> None:
-        while True:
-            with self._lock:
-                wanted, self._wanted = self._wanted, None
-                if wanted is None:
-                    self._busy = False
-                    return
-            key, draw = wanted
-            try:
-                self._tell(self.drawn, key, draw())
-            except Exception as error:  # noqa: BLE001 - whatever it is, the window's thread reports it
-                self._tell(self.failed, error)
-
-    def _tell(self, signal: SignalInstance, *values: object) -> None:
-        """Emit unless the window is gone."""
-        with self._lock:
-            closed = self._closed
-        if not closed:
-            with suppress(RuntimeError):  # the window was closed between the question and the answer
-                signal.emit(*values)
+        self._drawings.close()
 
     def _on_failed(self, error: BaseException) -> None:
         raise error
+
+
+def _drawn(key: object, draw: Draw) -> tuple[object, bytes]:
+    return key, draw()

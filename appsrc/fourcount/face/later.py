@@ -5,29 +5,74 @@ from __future__ import annotations
 import threading
 from collections.abc import Callable
 from contextlib import suppress
-from functools import partial
 from importlib import import_module
 from typing import TYPE_CHECKING
 
 from PySide6.QtCore import QObject, Qt, Signal, SignalInstance
 
 if TYPE_CHECKING:
-    from fourcount.appraisal.findings import CheckFindings, OutcomeFindings
     from fourcount.record.outcome import Outcome
     from fourcount.record.paper import Choices
 
-    Asked = tuple[Outcome, Choices]
-    Answer = OutcomeFindings | CheckFindings
 
+class Newest:
+    """Requests of one kind, one thread at a time: while one is worked on, the newest waits and older ones are dropped.
 
-class _Lane:
-    """Requests of one kind: while one is worked on, the newest waits and older ones are dropped."""
+    ``answer`` runs in the thread that ``start`` begins; what it gives for a request goes out by ``arrived``, what it
+    raises by ``failed``. Once closed nothing goes out any more.
+    """
 
-    def __init__(self, answer: Callable[[Outcome, Choices], Answer], arrived: SignalInstance) -> None:
-        self.answer = answer
-        self.arrived = arrived
-        self.wanted: Asked | None = None
-        self.busy = False
+    def __init__(
+        self,
+        start: Callable[[Callable[[], None]], None],
+        answer: Callable[..., tuple[object, ...]],
+        arrived: SignalInstance,
+        failed: SignalInstance,
+    ) -> None:
+        self._start = start
+        self._answer = answer
+        self._arrived = arrived
+        self._failed = failed
+        self._lock = threading.Lock()
+        self._wanted: tuple[object, ...] | None = None
+        self._busy = False
+        self._closed = False
+
+    def ask(self, *wanted: object) -> None:
+        """Answer this next, in place of whatever waits."""
+        with self._lock:
+            if self._closed:
+                return
+            self._wanted = wanted
+            if self._busy:
+                return
+            self._busy = True
+        self._start(self._work)
+
+    def close(self) -> None:
+        """Answer nothing any more."""
+        with self._lock:
+            self._closed = True
+            self._wanted = None
+
+    def _work(self) -> None:
+        while True:
+            with self._lock:
+                wanted, self._wanted = self._wanted, None
+                if wanted is None:
+                    self._busy = False
+                    return
+            try:
+                self._tell(self._arrived, *self._answer(*wanted))
+            except Exception as error:  # noqa: BLE001 - whatever it is, the window's thread reports it
+                self._tell(self._failed, error)
+
+    def _tell(self, signal: SignalInstance, *values: object) -> None:
+        with self._lock:
+            closed = self._closed
+        if not closed:
+            with suppress(RuntimeError):  # the window was closed between the question and the answer
+                signal.emit(*values)
 
 
 class Later(QObject):
@@ -49,34 +94,34 @@ class Later(QObject):
 
     def __init__(self, parent: QObject | None = None) -> None:
         super().__init__(parent)
-        self._lock = threading.Lock()
-        self._figures = _Lane(_appraised, self.arrived)
-        self._checks = _Lane(_checked, self.checked)
-        self._closed = False
         self._threads: list[threading.Thread] = []
+        self._libraries = Newest(self.start, _loaded, self.loaded, self.failed)
+        self._figures = Newest(self.start, _appraised, self.arrived, self.failed)
+        self._checks = Newest(self.start, _checked, self.checked, self.failed)
         self.failed.connect(self._on_failed, Qt.ConnectionType.QueuedConnection)
 
     def load(self) -> None:
         """Load numpy and scipy.special; an import-only thread."""
-        self._start(self._load)
+        self._libraries.ask()
 
     def ask(self, outcome: Outcome, choices: Choices) -> None:
         """Compute all figures of an outcome, however long they take."""
-        self._ask(self._figures, (outcome, choices))
+        self._figures.ask(outcome, choices)
 
     def ask_check(self, outcome: Outcome, choices: Choices) -> None:
         """Find out whether what the paper prints follows from its counts."""
-        self._ask(self._checks, (outcome, choices))
+        self._checks.ask(outcome, choices)
 
     def start(self, work: Callable[[], None]) -> None:
-        """Do something else in a thread of its own, which ``finish`` waits for as well."""
-        self._start(work)
+        """Do something in a thread of its own, which ``finish`` waits for as well."""
+        thread = threading.Thread(target=work, daemon=True, name="fourcount-later")
+        self._threads = [thread, *(other for other in self._threads if other.is_alive())]
+        thread.start()
 
     def close(self) -> None:
         """Answer nothing any more."""
-        with self._lock:
-            self._closed = True
-            self._figures.wanted = self._checks.wanted = None
+        for kind in (self._libraries, self._figures, self._checks):
+            kind.close()
 
     def finish(self, seconds: float) -> bool:
         """Wait for the threads to end, so many seconds at most for each; whether they did."""
@@ -85,58 +130,23 @@ class Later(QObject):
             thread.join(seconds)
         return not any(thread.is_alive() for thread in self._threads)
 
-    def _start(self, work: Callable[[], None]) -> None:
-        thread = threading.Thread(target=work, daemon=True, name="fourcount-later")
-        self._threads = [thread, *(other for other in self._threads if other.is_alive())]
-        thread.start()
-
-    def _load(self) -> None:
-        try:
-            import_module("numpy")
-            import_module("scipy.special")
-            self._tell(self.loaded)
-        except Exception as error:  # noqa: BLE001 - whatever it is, the window's thread reports it
-            self._tell(self.failed, error)
-
-    def _ask(self, lane: _Lane, asked: Asked) -> None:
-        with self._lock:
-            lane.wanted = asked
-            if lane.busy:
-                return
-            lane.busy = True
-        self._start(partial(self._work, lane))
-
-    def _work(self, lane: _Lane) -> None:
-        while True:
-            with self._lock:
-                wanted, lane.wanted = lane.wanted, None
-                if wanted is None:
-                    lane.busy = False
-                    return
-            try:
-                self._tell(lane.arrived, *wanted, lane.answer(*wanted))
-            except Exception as error:  # noqa: BLE001 - whatever it is, the window's thread reports it
-                self._tell(self.failed, error)
-
-    def _tell(self, signal: SignalInstance, *values: object) -> None:
-        """Emit unless the window is gone."""
-        with self._lock:
-            closed = self._closed
-        if not closed:
-            with suppress(RuntimeError):  # the window was closed between the question and the answer
-                signal.emit(*values)
-
     def _on_failed(self, error: BaseException) -> None:
         raise error
 
 
-def _appraised(outcome: Outcome, choices: Choices) -> OutcomeFindings:
+def _loaded() -> tuple[object, ...]:
+    import_module("numpy")
+    import_module("scipy.special")
+    return ()
+
+
+def _appraised(outcome: Outcome, choices: Choices) -> tuple[object, ...]:
     from fourcount.appraisal.appraise import appraise
 
-    return appraise(outcome, choices)
+    return outcome, choices, appraise(outcome, choices)
 
 
-def _checked(outcome: Outcome, choices: Choices) -> CheckFindings:
+def _checked(outcome: Outcome, choices: Choices) -> tuple[object, ...]:
     from fourcount.appraisal.check import check
 
-    return check(outcome, choices)
+    return outcome, choices, check(outcome, choices)
