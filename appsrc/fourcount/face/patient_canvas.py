@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from PySide6.QtCore import QSize, Qt
-from PySide6.QtGui import QFocusEvent, QKeyEvent, QPainter, QPaintEvent, QPen
+from PySide6.QtGui import QKeyEvent, QPainter, QPaintEvent, QPen
 from PySide6.QtWidgets import QScrollArea, QWidget
 
 from fourcount.face.on_white import OnWhite
@@ -65,14 +65,6 @@ class Canvas(QWidget):
             painter.setBrush(Qt.BrushStyle.NoBrush)  # what painted the page last may have left one
             painter.drawRect(self.rect().adjusted(1, 1, -1, -1))
         painter.end()
-
-    def focusInEvent(self, event: QFocusEvent) -> None:
-        super().focusInEvent(event)
-        self.update()
-
-    def focusOutEvent(self, event: QFocusEvent) -> None:
-        super().focusOutEvent(event)
-        self.update()
 
 
 class Scroll(QScrollArea):
