@@ -68,6 +68,22 @@ def test_a_bad_starting_risk_is_marked_and_nothing_drawn(example: Hands, typed: 
     assert patient.figures.picture.isVisible()
 
 
+def test_why_a_starting_risk_is_marked_comes_into_view(example: Hands) -> None:
+    """In a low window the sentence would lie under the fold, and the field alone says nothing."""
+    window = example.window
+    window.resize(900, 560)
+    example.do("baseline")
+    example.type("low")
+    mark, scroll = window.patient.mark, window.page_scroll
+    example.qtbot.waitUntil(mark.isVisible)
+
+    def bottom() -> int:
+        return mark.mapTo(scroll.viewport(), mark.rect().bottomLeft()).y()
+
+    example.qtbot.waitUntil(lambda: 0 < bottom() <= scroll.viewport().height())
+    assert example.field == "starting_risk_text"
+
+
 def test_a_starting_risk_keeps_its_source(example: Hands) -> None:
     """Where the risk is from is kept beside it."""
     example.write(example.window.patient.baseline, "12%")

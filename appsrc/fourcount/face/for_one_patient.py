@@ -35,9 +35,11 @@ class ForOnePatient(FieldsView):
 
     **Signals**
         chosen: a choice was made. Carries the outcome's field and the choice.
+        marked: what is being typed cannot be used. Carries the field and the sentence that says why.
     """
 
     chosen = Signal(str, object)
+    marked = Signal(object, object)
 
     start: StartFields
     quiet: QuietRows
@@ -156,12 +158,20 @@ class ForOnePatient(FieldsView):
         for part in (self.start, self.quiet):
             part.show_marks(view.marks)
         marked = [text for field, text in view.marks.items() if field in PATIENT_MARKS]
-        self.mark.show_words("\n".join(dict.fromkeys(marked)))
+        self._show_reasons("\n".join(dict.fromkeys(marked)))
         self.waits.show_words(view.waits)
         self.quiet.setVisible(not view.waits)
         self.quiet.show_state(outcome, self._fields.columnMinimumWidth(0))
         self.figures.show_view(view)
         self.figures.setVisible(not view.waits or view.to_odds)
+
+    def _show_reasons(self, reasons: str) -> None:
+        """Show why fields are marked; a new reason of the field in which somebody types is to be seen."""
+        new = reasons and reasons != self.mark.text()
+        self.mark.show_words(reasons)
+        typed = next((field for field in self.fields if field.hasFocus()), None)
+        if new and typed:
+            self.marked.emit(typed, self.mark)
 
     def _build(self) -> None:
         self._fields = QGridLayout()

@@ -21,7 +21,6 @@ from fourcount.face.look import Look
 from fourcount.face.session import Session
 from fourcount.face.settings import Settings
 from fourcount.face.what_it_says import WhatItSays
-from fourcount.record.entry.digits import specimen
 from fourcount.record.outcome import Outcome, Strata
 from fourcount.record.paper import Choices, Record
 from fourcount.wording import labels
@@ -124,6 +123,7 @@ class MainWindow(FileTarget):
 
     def _connect_all(self) -> None:
         """All wiring of the window, in one place."""
+        self.patient.marked.connect(self.page_scroll.bring)
         for view in (self.header, self.printed, self.says, self.patient):
             view.edited.connect(self.session.edit_text)
             view.edited.connect(self._show_focus)
@@ -225,7 +225,7 @@ class MainWindow(FileTarget):
             self.outcomes.show_enabled(self.actions_by_key)
             self.actions_by_key["curve"].setEnabled(self.patient.has_curve)
         path = self.session.document.path
-        self.setWindowTitle(labels.window_title(specimen(path.name) if path else record.title_text))
+        self.setWindowTitle(labels.window_title(record.title_text, path.name if path else ""))
         self.setWindowFilePath(str(path or ""))
         self.setWindowModified(self.session.unsaved)
         if self._shown is None or record is not self._shown[0] or self.session.view != self._shown[1]:

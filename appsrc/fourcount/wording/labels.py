@@ -247,7 +247,12 @@ NO_KEYS = "menu only"
 MISSING = "Still to be filled in: {names}."
 
 
-def window_title(name: str) -> str:
-    """The window's title for a file's name or a paper's title, in which nothing stands for the mark."""
+def window_title(title: str, file_name: str = "") -> str:
+    """The window's title for a file's name, or for a paper's title without one; nothing in it stands for the mark."""
+    name = title
+    if file_name:
+        from fourcount.record.entry.digits import specimen  # no first paint is of a file
+
+        name = specimen(file_name)
     shown = " ".join(name.split()).replace("[*]", "[*][*]")
     return TITLED_WINDOW.format(title=shown) if shown else WINDOW_TITLE
