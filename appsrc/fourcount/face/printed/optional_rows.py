@@ -2,21 +2,18 @@
 
 from __future__ import annotations
 
-from typing import NamedTuple
-
-from PySide6.QtCore import Qt, Signal
+from PySide6.QtCore import Qt
 from PySide6.QtWidgets import QGridLayout, QHBoxLayout, QWidget
 
 from fourcount.face.choice_field import ChoiceField
-from fourcount.face.fields import FieldsView, TextField
+from fourcount.face.fields import TextField
 from fourcount.face.look import Look
-from fourcount.face.printed.quiet_link import QuietLink
+from fourcount.face.rows_on_demand import EMPTY, Kind, RowOnDemand
 from fourcount.face.text import Words
 from fourcount.ink.typeset import bounded
 from fourcount.record.outcome import EffectOnly, Outcome
 from fourcount.wording import labels
 from fourcount.wording.printed_labels import (
-    CLOSE_FIELDS,
     COUNTING,
     FOLLOW_UP,
     OPTIONAL,
@@ -30,14 +27,6 @@ LOSSES = ("randomised_text", "lost_text")
 LOSS_RATIO = "loss_ratio_text"
 NAMED = ("icc_text", "cluster_size_text", "adjusted_for_text")
 """Fields with a word before them, which still says what they are when they are filled."""
-
-
-class Kind(NamedTuple):
-    """A row's text fields, and its choice: the outcome's field and what it offers."""
-
-    texts: tuple[str, ...] = ()
-    choice: str = ""
-    choices: tuple[tuple[object, str], ...] = ()
 
 
 ROWS: dict[str, Kind] = {
@@ -57,9 +46,6 @@ ROWS: dict[str, Kind] = {
 }
 
 
-EMPTY = Outcome()
-
-
 def holds(key: str, outcome: Outcome) -> bool:
     """Whether a row's fields hold anything but what an empty outcome has."""
     if key == "adjusted" and isinstance(outcome.table, EffectOnly):
@@ -72,23 +58,12 @@ def holds(key: str, outcome: Outcome) -> bool:
     return bool(kind.choice) and getattr(outcome, kind.choice) != getattr(EMPTY, kind.choice)
 
 
-class OptionalRow(FieldsView):
-    """Name, fields, and a way to close it while it is empty.
-
-    **Signals**
-        chosen: a choice was made. Carries the outcome's field and the choice.
-        closed: the row is to be closed. Carries its key.
-    """
-
-    chosen = Signal(str, object)
-    closed = Signal(str)
+class OptionalRow(RowOnDemand):
+    """The fields of one row, each kind in a layout of its own."""
 
     def __init__(self, look: Look, key: str) -> None:
-        super().__init__()
-        self._look = look
-        self._key = key
         kind = ROWS[key]
-        self.choice: ChoiceField | None = None
+        super().__init__(look, key, kind, OPTIONAL[key])
         if kind.choice:
             self.choice = ChoiceField(
                 look, OPTIONAL_FIELDS[kind.choice if key == "adjusted" else key], kind.choices,
@@ -99,14 +74,6 @@ class OptionalRow(FieldsView):
         self._group_names = {
             group: [Words(look, "small", "muted", name) for _ in range(2)] for group, name in labels.GROUP_NAMES.items()
         }
-        self.close_link = QuietLink(look, key, "×", CLOSE_FIELDS.format(name=OPTIONAL[key]))
-        self.close_link.opened.connect(self.closed)
-        policy = self.close_link.sizePolicy()
-        policy.setRetainSizeWhenHidden(True)  # nothing moves while somebody types
-        self.close_link.setSizePolicy(policy)
-        self._layout = QGridLayout(self)
-        self._layout.setContentsMargins(0, 0, 0, 0)
-        self._layout.setColumnStretch(1, 1)
         self._build(key)
         self._pass_on(*self.fields)
         look.changed.connect(self._on_look_changed)
@@ -115,11 +82,6 @@ class OptionalRow(FieldsView):
     @property
     def fields(self) -> tuple[TextField, ...]:
         return tuple(self._texts.values())
-
-    @property
-    def stops(self) -> tuple[QWidget, ...]:
-        """What Tab stops at, in order."""
-        return (*((self.choice,) if self.choice else ()), *self.fields, self.close_link)
 
     def show_state(self, outcome: Outcome) -> None:
         """Show what was typed and chosen."""
@@ -204,13 +166,6 @@ class OptionalRow(FieldsView):
     def read_in_order(self, parts: list[QWidget]) -> list[QWidget]:
         """The way to close it comes last, wherever it stands."""
         return [*(part for part in parts if part is not self.close_link), self.close_link]
-
-    def align(self, width: int) -> None:
-        """Give the name the width that names have in the rows above."""
-        self._layout.setColumnMinimumWidth(0, width)
-
-    def _on_chosen(self, choice: object) -> None:
-        self.chosen.emit(ROWS[self._key].choice, choice)
 
     def _on_look_changed(self) -> None:
         self._layout.setHorizontalSpacing(self._look.px(12 if self._key != "losses" else 4))
