@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Mapping, Sequence
+from collections.abc import Callable, Mapping, Sequence
 from typing import NamedTuple
 
 from PySide6.QtCore import Qt, Signal
@@ -13,7 +13,7 @@ from fourcount.face.fields import FieldsView, TextField
 from fourcount.face.flow import FlowLayout
 from fourcount.face.look import Look
 from fourcount.face.printed.quiet_link import QuietLink
-from fourcount.record.outcome import Outcome
+from fourcount.record.outcome import Outcome, Patient
 from fourcount.wording.printed_labels import CLOSE_FIELDS
 
 EMPTY = Outcome()
@@ -27,6 +27,15 @@ class Kind(NamedTuple):
     choices: tuple[tuple[object, str], ...] = ()
 
 
+Holds = Callable[[str, Outcome], bool]
+"""Whether a row's fields hold anything but what an empty outcome has, by the row's key."""
+
+
+def value(outcome: Outcome, name: str) -> object:
+    """What a field holds, in the outcome or its patient."""
+    return getattr(outcome.patient if name in Patient.__struct_fields__ else outcome, name)
+
+
 class RowOnDemand(FieldsView):
     """Name, fields, and a way to close it while it is empty.
 
@@ -38,12 +47,14 @@ class RowOnDemand(FieldsView):
     chosen = Signal(str, object)
     closed = Signal(str)
 
-    def __init__(self, look: Look, key: str, kind: Kind, name: str) -> None:
+    def __init__(self, look: Look, key: str, kind: Kind, name: str, holds: Holds) -> None:
         super().__init__()
         self._look = look
         self._key = key
         self._kind = kind
+        self._holds = holds
         self.choice: ChoiceField | None = None
+        self.fields: tuple[TextField, ...] = ()
         self.close_link = QuietLink(look, key, "×", CLOSE_FIELDS.format(name=name))
         self.close_link.opened.connect(self.closed)
         policy = self.close_link.sizePolicy()
@@ -54,18 +65,17 @@ class RowOnDemand(FieldsView):
         self._layout.setColumnStretch(1, 1)
 
     @property
-    def fields(self) -> Sequence[TextField]:
-        """The row's text fields, in order."""
-        raise NotImplementedError
-
-    @property
     def stops(self) -> tuple[QWidget, ...]:
         """What Tab stops at, in order."""
         return (*((self.choice,) if self.choice else ()), *self.fields, self.close_link)
 
     def show_state(self, outcome: Outcome) -> None:
         """Show what was typed and chosen."""
-        raise NotImplementedError
+        if self.choice:
+            self.choice.show_choice(value(outcome, self._kind.choice))
+        for field in self.fields:
+            field.show_text(str(value(outcome, field.field)))
+        self.close_link.setVisible(not self._holds(self._key, outcome))
 
     def align(self, width: int) -> None:
         """Give the name the width that names have in the rows above."""
@@ -76,7 +86,7 @@ class RowOnDemand(FieldsView):
 
 
 class RowsOnDemand(FieldsView):
-    """One line of links, and the rows that are open. A kind of rows says what they hold and where they stand.
+    """One line of links, and the rows that are open; ``make`` makes a row by its key.
 
     **Signals**
         chosen: a choice was made in a row. Carries the field's key and the choice.
@@ -85,11 +95,20 @@ class RowsOnDemand(FieldsView):
     chosen = Signal(str, object)
 
     def __init__(
-        self, look: Look, kinds: Mapping[str, Kind], links: Mapping[str, str], spacing: int, gap: int = 16
+        self,
+        look: Look,
+        kinds: Mapping[str, Kind],
+        links: Mapping[str, str],
+        make: Callable[[Look, str], RowOnDemand],
+        holds: Holds,
+        spacing: int,
+        gap: int = 16,
     ) -> None:
         super().__init__()
         self._look = look
         self._kinds = kinds
+        self._make = make
+        self._holds = holds
         self._spacing = spacing
         self._opened: set[str] = set()
         self._outcome = EMPTY
@@ -143,14 +162,6 @@ class RowsOnDemand(FieldsView):
                 self.show_state(self._outcome)
         return next((field for field in self.fields if field.field == name), None)
 
-    def _make(self, key: str) -> RowOnDemand:
-        """A row of its kind."""
-        raise NotImplementedError
-
-    def _holds(self, key: str, outcome: Outcome) -> bool:
-        """Whether a row's fields hold anything but what an empty outcome has."""
-        raise NotImplementedError
-
     def _offered(self, outcome: Outcome) -> Sequence[str]:
         """The rows that can be opened; one that holds something is there all the same."""
         return tuple(self._kinds)
@@ -162,7 +173,7 @@ class RowsOnDemand(FieldsView):
 
     def _row(self, key: str) -> RowOnDemand:
         if key not in self.rows:
-            row = self._make(key)
+            row = self._make(self._look, key)
             row.chosen.connect(self.chosen)
             row.closed.connect(self._on_closed)
             self._pass_on(row)

@@ -10,7 +10,7 @@ from PySide6.QtWidgets import QVBoxLayout, QWidget
 from fourcount.face.choice_field import ChoiceField
 from fourcount.face.fields import TextField
 from fourcount.face.look import Look
-from fourcount.face.rows_on_demand import EMPTY, Kind, RowOnDemand, RowsOnDemand
+from fourcount.face.rows_on_demand import EMPTY, Kind, RowOnDemand, RowsOnDemand, value
 from fourcount.face.text import Words
 from fourcount.record.outcome import Outcome
 from fourcount.wording.patient_labels import (
@@ -28,12 +28,6 @@ ROWS: dict[str, Kind] = {
     "certainty": Kind(choice="certainty", choices=tuple(CERTAINTIES.items())),
     "handout": Kind(choice="on_handout", choices=tuple(ON_HANDOUT.items())),
 }
-OF_PATIENT = ("other_span_text",)
-
-
-def value(outcome: Outcome, name: str) -> object:
-    """What a field holds, in the outcome or its patient."""
-    return getattr(outcome.patient if name in OF_PATIENT else outcome, name)
 
 
 def holds(key: str, outcome: Outcome) -> bool:
@@ -48,13 +42,13 @@ class QuietRow(RowOnDemand):
 
     def __init__(self, look: Look, key: str) -> None:
         kind = ROWS[key]
-        super().__init__(look, key, kind, QUIET[key])
+        super().__init__(look, key, kind, QUIET[key], holds)
         name = Words(look, "body", "muted", QUIET_NAMES[key], wraps=False)
         if kind.choice:
             self.choice = ChoiceField(look, QUIET_FIELDS[kind.choice], kind.choices)
             self.choice.chosen.connect(self._on_chosen)
             name.name_of(self.choice)
-        self._texts = tuple(TextField(look, text, QUIET_FIELDS[text], QUIET_HINTS.get(text, "")) for text in kind.texts)
+        self.fields = tuple(TextField(look, text, QUIET_FIELDS[text], QUIET_HINTS.get(text, "")) for text in kind.texts)
         self._layout.addWidget(name, 0, 0)
         for line, widget in enumerate(self.stops[:-1]):
             self._layout.addWidget(widget, line, 1)
@@ -63,23 +57,15 @@ class QuietRow(RowOnDemand):
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 
-    @property
-    def fields(self) -> tuple[TextField, ...]:
-        return self._texts
-
     def show_state(self, outcome: Outcome) -> None:
         """Show what was typed and chosen."""
-        if self.choice:
-            self.choice.show_choice(value(outcome, ROWS[self._key].choice))
-        for field in self.fields:
-            field.show_text(str(value(outcome, field.field)))
+        super().show_state(outcome)
         if self._key == "words":
             self._show_plain_hints(outcome)
         if self._key == "span":
             span = " ".join(outcome.span_text.split())
             known = QUIET_HINTS["other_span_known"].format(span=span)
             self.fields[0].setPlaceholderText(known if span else QUIET_HINTS["other_span_text"])
-        self.close_link.setVisible(not holds(self._key, outcome))
 
     def _show_plain_hints(self, outcome: Outcome) -> None:
         """An empty field shows what a patient is told without it."""
@@ -104,7 +90,7 @@ class QuietRows(RowsOnDemand):
 
     def __init__(self, look: Look, homes: Mapping[str, QVBoxLayout]) -> None:
         self._homes = homes
-        super().__init__(look, ROWS, QUIET, spacing=4, gap=12)
+        super().__init__(look, ROWS, QUIET, QuietRow, holds, spacing=4, gap=12)
 
     @property
     def stops(self) -> tuple[QWidget, ...]:
@@ -116,12 +102,6 @@ class QuietRows(RowsOnDemand):
     def stops_at_home(self) -> tuple[QWidget, ...]:
         """What Tab stops at in rows that stand elsewhere, in order."""
         return tuple(stop for key, row in self.rows.items() if key in self._homes for stop in row.stops)
-
-    def _make(self, key: str) -> RowOnDemand:
-        return QuietRow(self._look, key)
-
-    def _holds(self, key: str, outcome: Outcome) -> bool:
-        return holds(key, outcome)
 
     def _place(self, key: str, row: RowOnDemand) -> None:
         if key in self._homes:

@@ -30,18 +30,12 @@ class OptionalFields(RowsOnDemand):
     """One line of links, and under it the rows that are open."""
 
     def __init__(self, look: Look) -> None:
-        super().__init__(look, ROWS, OPTIONAL, spacing=6)
+        super().__init__(look, ROWS, OPTIONAL, OptionalRow, holds, spacing=6)
 
     @property
     def last_stop(self) -> QWidget:
         """The last place at which Tab stops here."""
         return [*self.links.values(), *(stop for row in self.rows.values() for stop in row.stops)][-1]
-
-    def _make(self, key: str) -> RowOnDemand:
-        return OptionalRow(self._look, key)
-
-    def _holds(self, key: str, outcome: Outcome) -> bool:
-        return holds(key, outcome)
 
     def _offered(self, outcome: Outcome) -> Sequence[str]:
         return OFFERED[form_of(outcome.table)]

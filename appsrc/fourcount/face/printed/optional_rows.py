@@ -63,7 +63,7 @@ class OptionalRow(RowOnDemand):
 
     def __init__(self, look: Look, key: str) -> None:
         kind = ROWS[key]
-        super().__init__(look, key, kind, OPTIONAL[key])
+        super().__init__(look, key, kind, OPTIONAL[key], holds)
         if kind.choice:
             self.choice = ChoiceField(
                 look, OPTIONAL_FIELDS[kind.choice if key == "adjusted" else key], kind.choices,
@@ -74,28 +74,20 @@ class OptionalRow(RowOnDemand):
         self._group_names = {
             group: [Words(look, "small", "muted", name) for _ in range(2)] for group, name in labels.GROUP_NAMES.items()
         }
+        self.fields = tuple(self._texts.values())
         self._build(key)
         self._pass_on(*self.fields)
         look.changed.connect(self._on_look_changed)
         self._on_look_changed()
 
-    @property
-    def fields(self) -> tuple[TextField, ...]:
-        return tuple(self._texts.values())
-
     def show_state(self, outcome: Outcome) -> None:
         """Show what was typed and chosen."""
-        kind = ROWS[self._key]
-        if self.choice:
-            self.choice.show_choice(getattr(outcome, kind.choice))
-        for name, field in self._texts.items():
-            field.show_text(getattr(outcome, name))
+        super().show_state(outcome)
         for group, words in self._group_names.items():
             role = labels.ROLES["index" if outcome.index_group == group else "reference"]
             for word in words:
                 word.setText(bounded(getattr(outcome, f"{group}_label_text").strip() or role))
                 word.setVisible(self._key == "losses")
-        self.close_link.setVisible(not holds(self._key, outcome))
 
     def _build(self, key: str) -> None:
         name = Words(self._look, "body", "muted", OPTIONAL_FIELDS[key], wraps=False)
